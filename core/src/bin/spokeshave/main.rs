@@ -1,0 +1,2 @@
+//! The command line, thin over the library.
+fn main() {}

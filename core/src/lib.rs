@@ -1,0 +1,3 @@
+//! Spokeshave fits a propeller to one particular aircraft and engine.
+pub mod air;
+pub mod section;

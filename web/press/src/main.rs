@@ -1,0 +1,2 @@
+//! Builds the one-file page.
+fn main() {}

@@ -1,0 +1,1 @@
+//! The Spokeshave page: a Yew app that runs entirely in the browser.
