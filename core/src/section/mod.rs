@@ -1,1 +1,15 @@
-//! Sections.
+//! Blade sections: outlines, tables of lift and drag, the best angle, and what lies beyond the tables.
+
+mod best;
+mod extend;
+mod family;
+mod library;
+mod local;
+mod polar;
+
+pub use best::{BAND_SHARE, Best, best, working_band};
+pub use extend::{BLADE_ASPECT_RATIO, Coefficients, Extension};
+pub use family::{About, Family, Landmarks, Outside};
+pub use library::{Library, library};
+pub use local::{Local, Situation};
+pub use polar::{FEWEST_POINTS, MOST_POINTS, MOST_POLARS, Polar, PolarPoint, TableError};

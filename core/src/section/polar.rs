@@ -1,0 +1,141 @@
+//! One polar as measured or computed: lift and drag against angle of attack at one Reynolds number.
+
+use serde::{Deserialize, Serialize};
+use thiserror::Error;
+
+/// One row of a polar.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize, Deserialize)]
+#[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
+#[serde(deny_unknown_fields)]
+pub struct PolarPoint {
+    /// Angle of attack to the chord line, degrees, −180 to 180.
+    pub alpha_deg: f64,
+    /// Lift coefficient.
+    pub cl: f64,
+    /// Drag coefficient, above zero.
+    pub cd: f64,
+}
+
+/// Lift and drag of one section at one Reynolds number, by rising angle of attack.
+#[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
+#[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
+#[serde(deny_unknown_fields)]
+pub struct Polar {
+    /// Chord Reynolds number; may be left out when it is the only polar of its thickness.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub reynolds: Option<f64>,
+    /// Mach number the polar holds for; 0 for incompressible flow.
+    #[serde(default)]
+    pub mach: f64,
+    /// Thickness over chord, for a family of sections; left out when the polars hold for one section only.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub thickness_ratio: Option<f64>,
+    /// The rows, by strictly rising angle.
+    pub points: Vec<PolarPoint>,
+}
+
+/// Fewest rows a polar may have.
+pub const FEWEST_POINTS: usize = 5;
+/// Most rows a polar may have.
+pub const MOST_POINTS: usize = 4_000;
+/// Most polars a section may have.
+pub const MOST_POLARS: usize = 400;
+
+/// What is wrong with a section's tables. `place` is a path below the section, such as `polars[2].points[7].cd`.
+#[derive(Clone, Debug, Error, PartialEq)]
+#[error("{place}: {problem}")]
+pub struct TableError {
+    /// Path below the section.
+    pub place: String,
+    /// What was found, and what is allowed.
+    pub problem: String,
+}
+
+impl TableError {
+    pub(super) fn new(place: impl Into<String>, problem: impl Into<String>) -> Self {
+        Self { place: place.into(), problem: problem.into() }
+    }
+}
+
+/// Checks all polars of one section.
+///
+/// # Errors
+/// The first table or row that is empty, not finite, out of order or out of range, by path.
+pub(super) fn check_polars(polars: &[Polar]) -> Result<(), TableError> {
+    if polars.is_empty() || polars.len() > MOST_POLARS {
+        let found = polars.len();
+        return Err(TableError::new("polars", format!("{found} polars; 1 to {MOST_POLARS} are allowed")));
+    }
+    for (i, polar) in polars.iter().enumerate() {
+        check_polar(i, polar)?;
+    }
+    check_family(polars)
+}
+
+fn check_polar(i: usize, polar: &Polar) -> Result<(), TableError> {
+    let at = |name: &str| format!("polars[{i}].{name}");
+    if let Some(re) = polar.reynolds
+        && !(100.0..=1e9).contains(&re)
+    {
+        return Err(TableError::new(at("reynolds"), format!("{re}; 100 to 1e9 is allowed")));
+    }
+    if !(0.0..0.95).contains(&polar.mach) {
+        return Err(TableError::new(at("mach"), format!("{}; 0 to below 0.95 is allowed", polar.mach)));
+    }
+    if let Some(t) = polar.thickness_ratio
+        && !(0.005..=1.0).contains(&t)
+    {
+        return Err(TableError::new(at("thickness_ratio"), format!("{t}; 0.005 to 1 is allowed")));
+    }
+    let n = polar.points.len();
+    if !(FEWEST_POINTS..=MOST_POINTS).contains(&n) {
+        let allowed = format!("{FEWEST_POINTS} to {MOST_POINTS} are allowed");
+        return Err(TableError::new(at("points"), format!("{n} rows; {allowed}")));
+    }
+    polar.points.iter().enumerate().try_for_each(|(j, p)| check_point(&at(&format!("points[{j}]")), p))?;
+    for (j, pair) in polar.points.windows(2).enumerate() {
+        if pair[1].alpha_deg - pair[0].alpha_deg < 1e-6 {
+            let place = at(&format!("points[{}].alpha_deg", j + 1));
+            let (a, b) = (pair[1].alpha_deg, pair[0].alpha_deg);
+            return Err(TableError::new(place, format!("{a} after {b}; angles must rise from row to row")));
+        }
+    }
+    Ok(())
+}
+
+fn check_point(at: &str, p: &PolarPoint) -> Result<(), TableError> {
+    let rules = [
+        ("alpha_deg", p.alpha_deg, (-180.0..=180.0).contains(&p.alpha_deg), "−180 to 180"),
+        ("cl", p.cl, p.cl.abs() <= 10.0, "−10 to 10"),
+        ("cd", p.cd, p.cd > 0.0 && p.cd <= 10.0, "above 0, up to 10"),
+    ];
+    match rules.iter().find(|(_, _, ok, _)| !ok) {
+        Some((name, value, _, allowed)) => {
+            Err(TableError::new(format!("{at}.{name}"), format!("{value}; allowed is {allowed}")))
+        }
+        None => Ok(()),
+    }
+}
+
+fn check_family(polars: &[Polar]) -> Result<(), TableError> {
+    for (i, a) in polars.iter().enumerate() {
+        if a.thickness_ratio.is_some() != polars[0].thickness_ratio.is_some() {
+            let place = format!("polars[{i}].thickness_ratio");
+            return Err(TableError::new(place, "given for some polars only; give it for all or for none"));
+        }
+        for (j, b) in polars.iter().enumerate().skip(i + 1) {
+            if a.thickness_ratio == b.thickness_ratio
+                && (a.reynolds == b.reynolds || a.reynolds.is_none() || b.reynolds.is_none())
+            {
+                let place = format!("polars[{j}].reynolds");
+                return Err(TableError::new(
+                    place,
+                    format!(
+                        "polars[{i}] has the same thickness and no other Reynolds number; each must differ"
+                    ),
+                ));
+            }
+        }
+    }
+    Ok(())
+}
