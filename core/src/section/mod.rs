@@ -5,6 +5,7 @@ mod extend;
 mod family;
 mod library;
 mod local;
+pub mod outline;
 mod polar;
 
 pub use best::{BAND_SHARE, Best, best, working_band};
