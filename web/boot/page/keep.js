@@ -1,0 +1,73 @@
+// Keeps the job safe in this browser, so that neither a reload nor a crash loses it.
+//
+// Every page opened from disk shares one storage. The keys therefore carry a version and a mark of the
+// job this very file was saved with: a page that came with another job does not find this one.
+(function (page) {
+  "use strict";
+  var node = document.getElementById("job");
+  var embedded = node ? node.textContent.trim() : "";
+  var mark = embedded ? fingerprint(embedded) : "blank";
+  var JOB = "spokeshave.1.job." + mark;
+  var ASIDE = "spokeshave.1.aside." + mark;
+  var AT_WORK = "spokeshave.1.at-work." + mark;
+  var latest = null;
+
+  // 32-bit FNV-1a over UTF-16 units: tells files apart, guards nothing.
+  function fingerprint(text) {
+    var hash = 0x811c9dc5;
+    for (var i = 0; i < text.length; i += 1) {
+      hash = Math.imul(hash ^ text.charCodeAt(i), 0x01000193);
+    }
+    return (hash >>> 0).toString(16);
+  }
+
+  function read(key) {
+    try { return window.localStorage.getItem(key); } catch (refused) { return null; }
+  }
+
+  // False where the browser refuses storage or has no room left.
+  function write(key, text) {
+    try { window.localStorage.setItem(key, text); return true; } catch (refused) { return false; }
+  }
+
+  function remove(key) {
+    try { window.localStorage.removeItem(key); } catch (refused) { return; }
+  }
+
+  page.keep = {
+    // The job to start with: the one kept here, else the one in the file, else null (an example).
+    // An empty string kept here says that the user chose the example.
+    atStart: function () {
+      var kept = read(JOB);
+      if (kept === null) { return embedded || null; }
+      return kept || null;
+    },
+    // Call before working a job out. The job goes into storage and into this document, so that the
+    // browser's own save command takes it along. Returns whether storage took it.
+    before: function (json) {
+      latest = json;
+      if (node) { node.textContent = json.replace(/</g, "\\u003c"); }
+      var kept = write(JOB, json);
+      write(AT_WORK, "1");
+      return kept;
+    },
+    // Call when the job has been worked out and shown.
+    after: function () { if (!page.stopped) { remove(AT_WORK); } },
+    // The page has stopped over this job: the next start asks before it tries again.
+    stopped: function () { write(AT_WORK, "1"); },
+    heldBack: function () { return read(AT_WORK) !== null && page.keep.atStart() !== null; },
+    tryAgain: function () { remove(AT_WORK); },
+    // The latest job, for a person to save.
+    latest: function () { return latest || page.keep.atStart(); },
+    // Puts the job aside and starts with an example from now on.
+    setAside: function () {
+      var job = page.keep.latest();
+      if (job) { write(ASIDE, job); }
+      write(JOB, "");
+      remove(AT_WORK);
+    }
+  };
+
+  // Leaving in the middle of a computation is no crash.
+  window.addEventListener("pagehide", function () { page.keep.after(); });
+})(window.spokeshave = window.spokeshave || {});
