@@ -1,1 +1,3 @@
-//! Outside checks of Spokeshave.
+//! Outside checks of Spokeshave: published values, reference cases, other judges, real browsers.
+
+pub mod reference;

@@ -96,8 +96,8 @@ impl Family {
         let tables: Vec<Vec<(f64, Coefficients)>> = order.iter().map(|p| extended(&own_rows(p))).collect();
         let grid = union_of_angles(&tables);
         if grid.len() * tables.len() > MOST_NODES || grid.len() > usize::from(u16::MAX) {
-            let problem = format!("{} different angles in {} polars are too many", grid.len(), tables.len());
-            return Err(TableError::new("polars", problem));
+            let found = format!("{} different angles in {} polars", grid.len(), tables.len());
+            return Err(TableError::new("polars", found, "polars that share their angles, or fewer"));
         }
         let nodes = tables.iter().flat_map(|t| on_grid(t, &grid)).collect();
         let entries = order.iter().map(|p| entry(p)).collect();

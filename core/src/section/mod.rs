@@ -13,4 +13,5 @@ pub use extend::{BLADE_ASPECT_RATIO, Coefficients, Extension};
 pub use family::{About, Family, Landmarks, Outside};
 pub use library::{Library, library};
 pub use local::{Local, Situation};
+pub(crate) use polar::check_polars;
 pub use polar::{FEWEST_POINTS, MOST_POINTS, MOST_POLARS, Polar, PolarPoint, TableError};

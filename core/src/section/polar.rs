@@ -43,17 +43,19 @@ pub const MOST_POLARS: usize = 400;
 
 /// What is wrong with a section's tables. `place` is a path below the section, such as `polars[2].points[7].cd`.
 #[derive(Clone, Debug, Error, PartialEq)]
-#[error("{place}: {problem}")]
+#[error("{place}: {found}; allowed is {allowed}")]
 pub struct TableError {
     /// Path below the section.
     pub place: String,
-    /// What was found, and what is allowed.
-    pub problem: String,
+    /// What was found.
+    pub found: String,
+    /// What is allowed.
+    pub allowed: String,
 }
 
 impl TableError {
-    pub(super) fn new(place: impl Into<String>, problem: impl Into<String>) -> Self {
-        Self { place: place.into(), problem: problem.into() }
+    pub(super) fn new(place: impl Into<String>, found: impl ToString, allowed: impl Into<String>) -> Self {
+        Self { place: place.into(), found: found.to_string(), allowed: allowed.into() }
     }
 }
 
@@ -61,10 +63,9 @@ impl TableError {
 ///
 /// # Errors
 /// The first table or row that is empty, not finite, out of order or out of range, by path.
-pub(super) fn check_polars(polars: &[Polar]) -> Result<(), TableError> {
+pub(crate) fn check_polars(polars: &[Polar]) -> Result<(), TableError> {
     if polars.is_empty() || polars.len() > MOST_POLARS {
-        let found = polars.len();
-        return Err(TableError::new("polars", format!("{found} polars; 1 to {MOST_POLARS} are allowed")));
+        return Err(TableError::new("polars", polars.len(), format!("1 to {MOST_POLARS} polars")));
     }
     for (i, polar) in polars.iter().enumerate() {
         check_polar(i, polar)?;
@@ -77,27 +78,30 @@ fn check_polar(i: usize, polar: &Polar) -> Result<(), TableError> {
     if let Some(re) = polar.reynolds
         && !(100.0..=1e9).contains(&re)
     {
-        return Err(TableError::new(at("reynolds"), format!("{re}; 100 to 1e9 is allowed")));
+        return Err(TableError::new(at("reynolds"), re, "100 to 1e9"));
     }
     if !(0.0..0.95).contains(&polar.mach) {
-        return Err(TableError::new(at("mach"), format!("{}; 0 to below 0.95 is allowed", polar.mach)));
+        return Err(TableError::new(at("mach"), polar.mach, "0 to below 0.95"));
     }
     if let Some(t) = polar.thickness_ratio
         && !(0.005..=1.0).contains(&t)
     {
-        return Err(TableError::new(at("thickness_ratio"), format!("{t}; 0.005 to 1 is allowed")));
+        return Err(TableError::new(at("thickness_ratio"), t, "0.005 to 1"));
     }
     let n = polar.points.len();
     if !(FEWEST_POINTS..=MOST_POINTS).contains(&n) {
-        let allowed = format!("{FEWEST_POINTS} to {MOST_POINTS} are allowed");
-        return Err(TableError::new(at("points"), format!("{n} rows; {allowed}")));
+        return Err(TableError::new(
+            at("points"),
+            format!("{n} rows"),
+            format!("{FEWEST_POINTS} to {MOST_POINTS} rows"),
+        ));
     }
     polar.points.iter().enumerate().try_for_each(|(j, p)| check_point(&at(&format!("points[{j}]")), p))?;
     for (j, pair) in polar.points.windows(2).enumerate() {
         if pair[1].alpha_deg - pair[0].alpha_deg < 1e-6 {
             let place = at(&format!("points[{}].alpha_deg", j + 1));
             let (a, b) = (pair[1].alpha_deg, pair[0].alpha_deg);
-            return Err(TableError::new(place, format!("{a} after {b}; angles must rise from row to row")));
+            return Err(TableError::new(place, a, format!("above {b}, the row before")));
         }
     }
     Ok(())
@@ -110,9 +114,7 @@ fn check_point(at: &str, p: &PolarPoint) -> Result<(), TableError> {
         ("cd", p.cd, p.cd > 0.0 && p.cd <= 10.0, "above 0, up to 10"),
     ];
     match rules.iter().find(|(_, _, ok, _)| !ok) {
-        Some((name, value, _, allowed)) => {
-            Err(TableError::new(format!("{at}.{name}"), format!("{value}; allowed is {allowed}")))
-        }
+        Some((name, value, _, allowed)) => Err(TableError::new(format!("{at}.{name}"), value, *allowed)),
         None => Ok(()),
     }
 }
@@ -121,18 +123,18 @@ fn check_family(polars: &[Polar]) -> Result<(), TableError> {
     for (i, a) in polars.iter().enumerate() {
         if a.thickness_ratio.is_some() != polars[0].thickness_ratio.is_some() {
             let place = format!("polars[{i}].thickness_ratio");
-            return Err(TableError::new(place, "given for some polars only; give it for all or for none"));
+            return Err(TableError::new(place, "given for some polars only", "all or none"));
         }
         for (j, b) in polars.iter().enumerate().skip(i + 1) {
             if a.thickness_ratio == b.thickness_ratio
                 && (a.reynolds == b.reynolds || a.reynolds.is_none() || b.reynolds.is_none())
             {
                 let place = format!("polars[{j}].reynolds");
+                let found = format!("the same as polars[{i}], or missing");
                 return Err(TableError::new(
                     place,
-                    format!(
-                        "polars[{i}] has the same thickness and no other Reynolds number; each must differ"
-                    ),
+                    found,
+                    "another Reynolds number for each polar of a thickness",
                 ));
             }
         }

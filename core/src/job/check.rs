@@ -1,0 +1,274 @@
+//! Checks of a job's values, each by path.
+
+use std::ops::RangeInclusive;
+
+use super::document::{
+    Aircraft, AltitudeLaw, AngleReference, Electric, Engine, FlightPoint, Job, Piston, PitchControl,
+    Propeller, Section, Setting, Station,
+};
+use super::error::{Problem, VERSION};
+use crate::air::{HIGHEST_M, LARGEST_OFFSET_K, LOWEST_M};
+use crate::section::{check_polars, library};
+
+const MOST_STATIONS: usize = 200;
+const MOST_FLIGHT_POINTS: usize = 50;
+const MOST_SECTIONS: usize = 40;
+const MOST_TEXT: usize = 200;
+
+/// Collects problems as they are found.
+#[derive(Default)]
+struct Found(Vec<Problem>);
+
+impl Found {
+    fn refuse(&mut self, path: String, found: impl ToString, allowed: impl Into<String>) {
+        self.0.push(Problem { path, found: found.to_string(), allowed: allowed.into() });
+    }
+
+    /// A NaN is in no range, so it is refused.
+    fn range(&mut self, path: String, value: f64, range: RangeInclusive<f64>, unit: &str) {
+        if !range.contains(&value) {
+            let unit = if unit.is_empty() { String::new() } else { format!(" {unit}") };
+            self.refuse(path, value, format!("{} to {}{unit}", range.start(), range.end()));
+        }
+    }
+
+    fn optional(&mut self, path: String, value: Option<f64>, range: RangeInclusive<f64>, unit: &str) {
+        if let Some(value) = value {
+            self.range(path, value, range, unit);
+        }
+    }
+
+    fn count(&mut self, path: &str, found: usize, range: RangeInclusive<usize>) {
+        if !range.contains(&found) {
+            self.refuse(path.into(), found, format!("{} to {}", range.start(), range.end()));
+        }
+    }
+}
+
+/// Every problem of a job.
+pub(super) fn problems(job: &Job) -> Vec<Problem> {
+    let mut found = Found::default();
+    if job.spokeshave != VERSION {
+        found.refuse("spokeshave".into(), job.spokeshave, VERSION.to_string());
+    }
+    text(&mut found, "title", &job.title, 0);
+    if let Some(aircraft) = &job.aircraft {
+        check_aircraft(&mut found, aircraft);
+    }
+    match &job.engine {
+        Some(Engine::Piston(piston)) => check_piston(&mut found, piston),
+        Some(Engine::Electric(electric)) => check_electric(&mut found, electric),
+        None => {}
+    }
+    check_sections(&mut found, &job.sections);
+    check_propeller(&mut found, &job.propeller);
+    check_stations(&mut found, job);
+    check_flight_points(&mut found, &job.flight_points);
+    found.range("method.elements".into(), f64::from(job.method.elements), 10.0..=400.0, "");
+    found.range("method.n_crit".into(), job.method.n_crit, 1.0..=14.0, "");
+    if let Some(wood) = &job.wood {
+        text(&mut found, "wood.species", &wood.species, 1);
+        found.optional("wood.laminations".into(), wood.laminations.map(f64::from), 1.0..=60.0, "");
+    }
+    found.0
+}
+
+fn text(found: &mut Found, path: &str, value: &str, fewest: usize) {
+    let n = value.chars().count();
+    if !(fewest..=MOST_TEXT).contains(&n) {
+        found.refuse(path.into(), format!("{n} characters"), format!("{fewest} to {MOST_TEXT} characters"));
+    }
+}
+
+fn check_aircraft(found: &mut Found, aircraft: &Aircraft) {
+    let at = |name: &str| format!("aircraft.{name}");
+    match aircraft {
+        Aircraft::Aeroplane(a) => {
+            found.range(at("mass_kg"), a.mass_kg, 0.01..=100_000.0, "kg");
+            found.range(at("wing_area_m2"), a.wing_area_m2, 0.001..=1_000.0, "m²");
+            found.range(at("drag.cd0"), a.drag.cd0, 0.001..=1.0, "");
+            found.optional(at("drag.k"), a.drag.k, 0.001..=1.0, "");
+            found.optional(at("drag.aspect_ratio"), a.drag.aspect_ratio, 1.0..=60.0, "");
+            found.optional(at("drag.oswald"), a.drag.oswald, 0.2..=1.2, "");
+            if a.drag.k.is_some() == (a.drag.aspect_ratio.is_some() && a.drag.oswald.is_some()) {
+                found.refuse(at("drag"), "neither or both", "either k, or aspect_ratio and oswald");
+            }
+            found.optional(at("cl_max"), a.cl_max, 0.2..=5.0, "");
+            found.range(at("engines"), f64::from(a.engines), 1.0..=12.0, "");
+        }
+        Aircraft::Multirotor(m) => {
+            found.range(at("mass_kg"), m.mass_kg, 0.01..=10_000.0, "kg");
+            found.range(at("rotors"), f64::from(m.rotors), 1.0..=32.0, "");
+        }
+    }
+}
+
+fn check_piston(found: &mut Found, p: &Piston) {
+    let at = |name: &str| format!("engine.{name}");
+    found.count("engine.full_throttle", p.full_throttle.len(), 2..=200);
+    for (i, point) in p.full_throttle.iter().enumerate() {
+        found.range(at(&format!("full_throttle[{i}].rpm")), point.rpm, 100.0..=60_000.0, "rpm");
+        found.range(at(&format!("full_throttle[{i}].power_w")), point.power_w, 1.0..=5e6, "W");
+        if i > 0 && point.rpm <= p.full_throttle[i - 1].rpm {
+            let before = p.full_throttle[i - 1].rpm;
+            found.refuse(
+                at(&format!("full_throttle[{i}].rpm")),
+                point.rpm,
+                format!("above {before}, the one before"),
+            );
+        }
+    }
+    found.range(at("gear_ratio"), p.gear_ratio, 0.1..=20.0, "");
+    found.optional(at("max_rpm"), p.max_rpm, 100.0..=60_000.0, "rpm");
+    found.optional(at("idle_rpm"), p.idle_rpm, 50.0..=20_000.0, "rpm");
+    found.optional(at("bsfc_kg_per_kwh"), p.bsfc_kg_per_kwh, 0.05..=3.0, "kg per kWh");
+    found.optional(at("fuel_kg"), p.fuel_kg, 0.0..=50_000.0, "kg");
+    if let AltitudeLaw::HeldTo(held) = &p.altitude_law {
+        found.range(at("altitude_law.altitude_m"), held.altitude_m, 0.0..=HIGHEST_M, "m");
+    }
+}
+
+fn check_electric(found: &mut Found, e: &Electric) {
+    let at = |name: &str| format!("engine.{name}");
+    found.range(at("kv_rpm_per_v"), e.kv_rpm_per_v, 1.0..=20_000.0, "rpm per V");
+    found.range(at("resistance_ohm"), e.resistance_ohm, 1e-5..=100.0, "Ω");
+    found.range(at("no_load_current_a"), e.no_load_current_a, 0.0..=1_000.0, "A");
+    found.optional(at("no_load_voltage_v"), e.no_load_voltage_v, 0.1..=2_000.0, "V");
+    found.optional(at("max_current_a"), e.max_current_a, 0.01..=10_000.0, "A");
+    found.range(at("gear_ratio"), e.gear_ratio, 0.1..=50.0, "");
+    found.range(at("controller_resistance_ohm"), e.controller_resistance_ohm, 0.0..=100.0, "Ω");
+    found.range(at("battery.cells"), f64::from(e.battery.cells), 1.0..=500.0, "");
+    found.range(at("battery.open_circuit_v_per_cell"), e.battery.open_circuit_v_per_cell, 0.5..=6.0, "V");
+    found.range(at("battery.resistance_ohm_per_cell"), e.battery.resistance_ohm_per_cell, 0.0..=10.0, "Ω");
+    found.range(at("battery.capacity_ah"), e.battery.capacity_ah, 0.001..=10_000.0, "A h");
+    found.range(at("battery.usable_fraction"), e.battery.usable_fraction, 0.01..=1.0, "");
+}
+
+fn check_sections(found: &mut Found, sections: &[Section]) {
+    found.count("sections", sections.len(), 0..=MOST_SECTIONS);
+    for (i, s) in sections.iter().enumerate() {
+        text(found, &format!("sections[{i}].name"), &s.name, 1);
+        if sections[..i].iter().any(|other| other.name == s.name) {
+            found.refuse(format!("sections[{i}].name"), format!("\"{}\" twice", s.name), "a name used once");
+        }
+        found.optional(format!("sections[{i}].face_angle_deg"), s.face_angle_deg, -20.0..=20.0, "degrees");
+        found.range(format!("sections[{i}].korn_factor"), s.korn_factor, 0.7..=1.0, "");
+        if let Err(e) = check_polars(&s.polars) {
+            found.refuse(format!("sections[{i}].{}", e.place), e.found, e.allowed);
+        }
+    }
+}
+
+fn check_propeller(found: &mut Found, p: &Propeller) {
+    let at = |name: &str| format!("propeller.{name}");
+    found.range(at("blades"), f64::from(p.blades), 1.0..=12.0, "");
+    found.range(at("diameter_m"), p.diameter_m, 0.02..=12.0, "m");
+    if !(p.hub_diameter_m >= 0.0 && p.hub_diameter_m <= 0.9 * p.diameter_m) {
+        found.refuse(at("hub_diameter_m"), p.hub_diameter_m, "0 m to nine tenths of the diameter");
+    }
+    match p.pitch_control {
+        PitchControl::Fixed {} => {}
+        PitchControl::GroundAdjustable { turn_deg } => {
+            found.range(at("pitch_control.turn_deg"), turn_deg, -60.0..=60.0, "degrees");
+        }
+        PitchControl::ConstantSpeed { rpm, turn_min_deg, turn_max_deg } => {
+            found.range(at("pitch_control.rpm"), rpm, 10.0..=60_000.0, "rpm");
+            found.range(at("pitch_control.turn_min_deg"), turn_min_deg, -60.0..=60.0, "degrees");
+            found.range(
+                at("pitch_control.turn_max_deg"),
+                turn_max_deg,
+                turn_min_deg.max(-60.0)..=90.0,
+                "degrees",
+            );
+        }
+    }
+}
+
+fn check_stations(found: &mut Found, job: &Job) {
+    let stations = &job.propeller.stations;
+    found.count("propeller.stations", stations.len(), 2..=MOST_STATIONS);
+    for (i, s) in stations.iter().enumerate() {
+        let at = |name: &str| format!("propeller.stations[{i}].{name}");
+        found.range(at("radius_fraction"), s.radius_fraction, 0.001..=1.0, "of the tip radius");
+        if i > 0 && s.radius_fraction - stations[i - 1].radius_fraction < 1e-9 {
+            let before = stations[i - 1].radius_fraction;
+            found.refuse(
+                at("radius_fraction"),
+                s.radius_fraction,
+                format!("above {before}, the station before"),
+            );
+        }
+        let widest = job.propeller.diameter_m;
+        if !(s.chord_m > 0.0 && s.chord_m <= widest) {
+            found.refuse(at("chord_m"), s.chord_m, format!("above 0, up to the diameter, {widest} m"));
+        }
+        found.range(at("thickness_ratio"), s.thickness_ratio, 0.005..=1.0, "of the chord");
+        check_angle(found, &at, s);
+        check_section_name(found, at("section"), s, job);
+    }
+}
+
+fn check_angle(found: &mut Found, at: &impl Fn(&str) -> String, s: &Station) {
+    found.optional(at("angle_deg"), s.angle_deg, -90.0..=90.0, "degrees");
+    found.optional(at("pitch_m"), s.pitch_m, -100.0..=100.0, "m");
+    match (s.angle_deg, s.pitch_m) {
+        (None, None) => found.refuse(at("angle_deg"), "missing", "angle_deg or pitch_m"),
+        (Some(_), Some(_)) => found.refuse(at("pitch_m"), "given beside angle_deg", "one of the two"),
+        _ => {}
+    }
+}
+
+fn check_section_name(found: &mut Found, path: String, s: &Station, job: &Job) {
+    let own = job.sections.iter().find(|own| own.name == s.section);
+    let shipped = library().family(&s.section, job.method.n_crit);
+    if own.is_none() && shipped.is_none() {
+        found.refuse(path, format!("\"{}\"", s.section), format!("one of {}", known_names(job)));
+        return;
+    }
+    let has_face = own.map_or_else(
+        || shipped.is_some_and(|f| !f.about.face_angle_deg.is_empty()),
+        |own| own.face_angle_deg.is_some(),
+    );
+    if job.propeller.angle_reference == AngleReference::FlatFace && !has_face {
+        let allowed = "a section with a flat face while angle_reference is flat-face";
+        found.refuse(path, format!("\"{}\" has no flat face", s.section), allowed);
+    }
+}
+
+/// Whether a station may call a section by this name.
+#[must_use]
+pub fn section_name_known(job: &Job, name: &str) -> bool {
+    job.sections.iter().any(|own| own.name == name) || library().family(name, job.method.n_crit).is_some()
+}
+
+fn known_names(job: &Job) -> String {
+    let own = job.sections.iter().map(|s| s.name.as_str());
+    own.chain(library().names()).collect::<Vec<_>>().join(", ")
+}
+
+fn check_flight_points(found: &mut Found, points: &[FlightPoint]) {
+    found.count("flight_points", points.len(), 1..=MOST_FLIGHT_POINTS);
+    for (i, p) in points.iter().enumerate() {
+        let at = |name: &str| format!("flight_points[{i}].{name}");
+        text(found, &at("name"), &p.name, 1);
+        if points[..i].iter().any(|other| other.name == p.name) {
+            found.refuse(at("name"), format!("\"{}\" twice", p.name), "a name used once");
+        }
+        found.range(at("altitude_m"), p.altitude_m, LOWEST_M..=HIGHEST_M, "m");
+        found.range(at("isa_offset_k"), p.isa_offset_k, -LARGEST_OFFSET_K..=LARGEST_OFFSET_K, "K");
+        found.optional(at("airspeed_m_s"), p.airspeed_m_s, 0.0..=340.0, "m/s");
+        match p.setting {
+            Setting::Rpm { rpm } => found.range(at("setting.rpm"), rpm, 1.0..=100_000.0, "rpm"),
+            Setting::Power { power_w } => found.range(at("setting.power_w"), power_w, 0.001..=5e6, "W"),
+            Setting::Throttle { fraction } => found.range(at("setting.fraction"), fraction, 0.01..=1.0, ""),
+            Setting::FullThrottle {} | Setting::Level {} => {}
+        }
+        if p.airspeed_m_s.is_none() && !matches!(p.setting, Setting::FullThrottle {}) {
+            found.refuse(
+                at("airspeed_m_s"),
+                "missing",
+                "an airspeed; only full-throttle may go without, for top speed",
+            );
+        }
+    }
+}

@@ -1,0 +1,66 @@
+//! What can be wrong with a job file, said with the place, the value and what is allowed.
+
+use std::fmt;
+
+use thiserror::Error;
+
+/// One wrong value.
+#[derive(Clone, Debug, PartialEq, Eq)]
+pub struct Problem {
+    /// Path in the file, such as `propeller.stations[3].chord_m`.
+    pub path: String,
+    /// What was found.
+    pub found: String,
+    /// What is allowed.
+    pub allowed: String,
+}
+
+impl fmt::Display for Problem {
+    fn fmt(&self, f: &mut fmt::Formatter<'_>) -> fmt::Result {
+        write!(f, "{}: {}; allowed is {}", self.path, self.found, self.allowed)
+    }
+}
+
+/// Why a job file was refused.
+#[derive(Clone, Debug, Error, PartialEq, Eq)]
+#[non_exhaustive]
+pub enum JobError {
+    /// The file is larger than any job.
+    #[error("the file has {found_bytes} bytes; a job has at most {MOST_BYTES}")]
+    TooLarge {
+        /// Its size.
+        found_bytes: usize,
+    },
+    /// The text is not JSON.
+    #[error("line {line}, column {column}: not JSON: {message}")]
+    Syntax {
+        /// Line, from 1.
+        line: usize,
+        /// Column, from 1.
+        column: usize,
+        /// What the reader says.
+        message: String,
+    },
+    /// Not a job, or one of another version.
+    #[error("spokeshave: {found}; allowed is {VERSION}, the version this program reads")]
+    Version {
+        /// What stands there.
+        found: String,
+    },
+    /// A name is unknown or missing, or a value is of the wrong type.
+    #[error("{path}: {message}")]
+    Shape {
+        /// Path in the file.
+        path: String,
+        /// What is wrong.
+        message: String,
+    },
+    /// Values that are not allowed.
+    #[error("{}", .0.iter().map(ToString::to_string).collect::<Vec<_>>().join("\n"))]
+    Values(Vec<Problem>),
+}
+
+/// Largest job file read, bytes.
+pub const MOST_BYTES: usize = 16 * 1024 * 1024;
+/// Version of the file's contract.
+pub const VERSION: u32 = 1;

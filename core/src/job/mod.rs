@@ -1,0 +1,87 @@
+//! The job file: reading, checking, writing. Every error names its path, the value and what is allowed.
+
+mod altitude_law;
+mod by_kind;
+mod check;
+mod demo;
+mod document;
+mod error;
+
+pub use check::section_name_known;
+pub use demo::{DEMOS, Demo};
+pub use document::{
+    Aeroplane, Aircraft, AltitudeLaw, AngleReference, Battery, Drag, Electric, Engine, FlightPoint, HeldTo,
+    HeldToKind, Job, Method, Multirotor, Piston, PitchControl, PowerPoint, Propeller, Rotation, Section,
+    Setting, Station, Wood,
+};
+pub use error::{JobError, MOST_BYTES, Problem, VERSION};
+
+use serde_json::Value;
+
+impl Job {
+    /// Reads and checks a job file.
+    ///
+    /// # Errors
+    /// The first thing wrong with its size, syntax, version or shape; else every value that is not allowed.
+    ///
+    /// ```
+    /// use spokeshave::job::{DEMOS, Job};
+    /// let job = Job::from_json(DEMOS[0].json).unwrap();
+    /// assert!(job.propeller.blades > 0);
+    /// ```
+    pub fn from_json(text: &str) -> Result<Self, JobError> {
+        if text.len() > MOST_BYTES {
+            return Err(JobError::TooLarge { found_bytes: text.len() });
+        }
+        let value: Value = serde_json::from_str(text.trim_start_matches('\u{feff}'))
+            .map_err(|e| JobError::Syntax { line: e.line(), column: e.column(), message: e.to_string() })?;
+        check_version(&value)?;
+        let job: Self = serde_path_to_error::deserialize(value).map_err(|e| shape_error(&e))?;
+        match job.check() {
+            problems if problems.is_empty() => Ok(job),
+            problems => Err(JobError::Values(problems)),
+        }
+    }
+
+    /// The job as a file's text. Reading it back gives the same job.
+    #[must_use]
+    pub fn to_json(&self) -> String {
+        // Plain structs of numbers and text always serialise.
+        serde_json::to_string_pretty(self).unwrap_or_default()
+    }
+
+    /// Every value that is not allowed.
+    #[must_use]
+    pub fn check(&self) -> Vec<Problem> {
+        check::problems(self)
+    }
+}
+
+fn check_version(value: &Value) -> Result<(), JobError> {
+    match value.get("spokeshave") {
+        Some(v) if v.as_u64() == Some(u64::from(VERSION)) => Ok(()),
+        Some(other) => Err(JobError::Version { found: other.to_string() }),
+        None => Err(JobError::Version { found: "missing".into() }),
+    }
+}
+
+fn shape_error(e: &serde_path_to_error::Error<serde_json::Error>) -> JobError {
+    let (outer, text) = (e.path().to_string(), e.inner().to_string());
+    let (inner, message) = text.split_once(by_kind::PATH_MARK).unwrap_or(("", &text));
+    let path = [outer.as_str(), inner]
+        .into_iter()
+        .filter(|p| !p.is_empty() && *p != ".")
+        .collect::<Vec<_>>()
+        .join(".");
+    JobError::Shape {
+        path: if path.is_empty() { "the file".into() } else { path },
+        message: message.to_string(),
+    }
+}
+
+/// The JSON Schema of the job file.
+#[cfg(feature = "cli")]
+#[must_use]
+pub fn schema() -> Value {
+    schemars::schema_for!(Job).to_value()
+}

@@ -1,0 +1,231 @@
+//! Results as plain data. Names and units are those of the JSON output; figures without an answer are `None`, never NaN.
+
+use serde::Serialize;
+
+/// All that is known of a job's flight points.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Analysis {
+    /// Version of the contract.
+    pub spokeshave: u32,
+    /// The job's title.
+    pub title: String,
+    /// Figures of the propeller that no flight point changes.
+    pub propeller: PropellerFigures,
+    /// One result for each flight point, in order.
+    pub flight_points: Vec<PointResult>,
+}
+
+/// Figures of the propeller alone.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct PropellerFigures {
+    /// Number of blades.
+    pub blades: u32,
+    /// Diameter, m.
+    pub diameter_m: f64,
+    /// Activity factor of one blade: `(100 000/16) ∫ (c/D) x³ dx` from the hub to the tip.
+    pub activity_factor: f64,
+    /// Blade area over disc area.
+    pub solidity: f64,
+    /// Blade angle to the chord line at 0.75 R, degrees.
+    pub blade_angle_075_deg: f64,
+    /// Geometric pitch at 0.75 R, m.
+    pub geometric_pitch_m: f64,
+}
+
+/// Whether a flight point has an answer.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "kebab-case")]
+#[non_exhaustive]
+pub enum State {
+    /// There is an answer.
+    Ok,
+    /// The setting needs an engine and the job has none.
+    NeedsEngine,
+    /// The setting needs an aircraft and the job has none.
+    NeedsAircraft,
+    /// The engine has too little power to turn the propeller at any rpm of its curve.
+    EngineCannotTurnIt,
+    /// The propeller would turn faster than the engine's curve or limit.
+    OverLimitRpm,
+    /// No rpm within limits absorbs the power or gives the thrust asked for.
+    OutOfReach,
+}
+
+impl State {
+    /// One plain sentence.
+    #[must_use]
+    pub fn sentence(self) -> &'static str {
+        match self {
+            Self::Ok => "There is an answer.",
+            Self::NeedsEngine => "This setting needs an engine, and the job has none.",
+            Self::NeedsAircraft => "This setting needs an aircraft, and the job has none.",
+            Self::EngineCannotTurnIt => "The engine cannot turn this propeller at any rpm of its curve.",
+            Self::OverLimitRpm => "The propeller would run past the engine's limit.",
+            Self::OutOfReach => "No rpm gives what is asked for.",
+        }
+    }
+}
+
+/// Something worth knowing about an answer.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "kebab-case")]
+#[non_exhaustive]
+pub enum Note {
+    /// Past the angle of greatest lift.
+    Stalled,
+    /// Angle of attack beyond the rows of the table: the extension past stall was used.
+    PastTable,
+    /// Reynolds number outside the tables, held at their edge.
+    ReynoldsOutsideTables,
+    /// Thickness outside the tables, held at their edge.
+    ThicknessOutsideTables,
+    /// Mach number above 0.85: not to be relied on.
+    MachNotReliable,
+    /// The blade is braked by the air (negative thrust) here.
+    Windmilling,
+    /// No balance of momentum was found here; no load is counted.
+    NoBalance,
+    /// At hub or tip, where the load is nothing by definition.
+    NoLoadAtEnd,
+}
+
+impl Note {
+    /// A few plain words.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::Stalled => "stalled",
+            Self::PastTable => "angle past the table, extended",
+            Self::ReynoldsOutsideTables => "Reynolds number outside the tables, held at their edge",
+            Self::ThicknessOutsideTables => "thickness outside the tables, held at their edge",
+            Self::MachNotReliable => "Mach number above 0.85, not to be relied on",
+            Self::Windmilling => "driven by the air",
+            Self::NoBalance => "no balance found, no load counted",
+            Self::NoLoadAtEnd => "at the end of the blade, no load",
+        }
+    }
+}
+
+/// One flight point worked out.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct PointResult {
+    /// The flight point's name.
+    pub name: String,
+    /// Whether there is an answer.
+    pub state: State,
+    /// True airspeed, m/s.
+    pub airspeed_m_s: Option<f64>,
+    /// Propeller rpm.
+    pub rpm: Option<f64>,
+    /// Angle the blades are turned in the hub, degrees; positive is coarser.
+    pub turn_deg: f64,
+    /// Air density, kg/m³.
+    pub density_kg_m3: f64,
+    /// The figures of the whole propeller; null in the JSON when there is no answer.
+    #[serde(flatten)]
+    pub figures: Figures,
+    /// Figures by station, of the job file's stations.
+    pub stations: Vec<StationResult>,
+    /// What holds somewhere on the blade.
+    pub notes: Vec<Note>,
+}
+
+/// Figures of the whole propeller (one propeller).
+#[derive(Clone, Debug, Default, PartialEq, Serialize)]
+pub struct Figures {
+    /// `J = V/(n D)`.
+    pub advance_ratio: Option<f64>,
+    /// `CT = T/(ρ n² D⁴)`.
+    pub ct: Option<f64>,
+    /// `CP = P/(ρ n³ D⁵)`.
+    pub cp: Option<f64>,
+    /// `CQ = Q/(ρ n² D⁵)`.
+    pub cq: Option<f64>,
+    /// Thrust over torque coefficient.
+    pub ct_over_cq: Option<f64>,
+    /// `T V/P`, when thrust, speed and power are positive.
+    pub efficiency: Option<f64>,
+    /// `T^1.5/(sqrt(2 ρ π R²) P)` at rest.
+    pub figure_of_merit: Option<f64>,
+    /// Thrust, N.
+    pub thrust_n: Option<f64>,
+    /// Torque, N m, positive when the engine supplies it.
+    pub torque_n_m: Option<f64>,
+    /// Shaft power, W.
+    pub power_w: Option<f64>,
+    /// Helical Mach number of the tip.
+    pub tip_mach: Option<f64>,
+    /// Blade angle to the chord line at 0.75 R, turned, degrees.
+    pub blade_angle_075_deg: Option<f64>,
+    /// Advance angle `atan(V/(Ω r))` at 0.75 R, degrees.
+    pub advance_angle_075_deg: Option<f64>,
+    /// Angle of attack at 0.75 R, degrees.
+    pub angle_of_attack_075_deg: Option<f64>,
+    /// Geometric pitch at 0.75 R, `2π r tan(blade angle)`, m.
+    pub geometric_pitch_m: Option<f64>,
+    /// Effective pitch, advance per turn `V/n`, m.
+    pub effective_pitch_m: Option<f64>,
+    /// Slip, `1 − effective/geometric pitch`.
+    pub slip: Option<f64>,
+}
+
+/// One station worked out.
+#[derive(Clone, Debug, Default, PartialEq, Serialize)]
+pub struct StationResult {
+    /// Radius, m.
+    pub radius_m: f64,
+    /// Radius over tip radius.
+    pub radius_fraction: f64,
+    /// Chord, m.
+    pub chord_m: f64,
+    /// Thickness over chord.
+    pub thickness_ratio: f64,
+    /// Blade angle to the chord line, turned, degrees.
+    pub blade_angle_deg: f64,
+    /// Blade angle on the flat face, turned, degrees.
+    pub face_angle_deg: Option<f64>,
+    /// Angle of the air to the plane of rotation, degrees.
+    pub inflow_angle_deg: Option<f64>,
+    /// Angle of attack, degrees.
+    pub angle_of_attack_deg: Option<f64>,
+    /// Angle of best lift-to-drag at this Reynolds and Mach number, degrees.
+    pub best_angle_deg: Option<f64>,
+    /// Angle of attack minus best angle, degrees; below zero is slack, above is hard.
+    pub departure_deg: Option<f64>,
+    /// Lift-to-drag over its best.
+    pub share_of_best: Option<f64>,
+    /// Lower edge of the working band, as a departure, degrees.
+    pub band_low_deg: Option<f64>,
+    /// Upper edge of the working band, as a departure, degrees.
+    pub band_high_deg: Option<f64>,
+    /// Angle of greatest lift, degrees.
+    pub stall_angle_deg: Option<f64>,
+    /// Best lift-to-drag here.
+    pub best_lift_to_drag: Option<f64>,
+    /// Lift coefficient.
+    pub cl: Option<f64>,
+    /// Drag coefficient.
+    pub cd: Option<f64>,
+    /// Chord Reynolds number.
+    pub reynolds: f64,
+    /// Helical Mach number.
+    pub mach: f64,
+    /// Speed at which the air meets the blade, m/s.
+    pub relative_speed_m_s: Option<f64>,
+    /// Induced axial velocity at the disc, m/s.
+    pub induced_axial_m_s: Option<f64>,
+    /// Induced swirl at the disc, m/s.
+    pub induced_swirl_m_s: Option<f64>,
+    /// `u/V`; none at rest.
+    pub axial_factor: Option<f64>,
+    /// `v/(Ω r)`.
+    pub swirl_factor: Option<f64>,
+    /// Prandtl factor, tip times hub.
+    pub loss_factor: Option<f64>,
+    /// Thrust per metre of radius, all blades, N/m.
+    pub thrust_n_per_m: f64,
+    /// Torque per metre of radius, all blades, N m/m.
+    pub torque_n_m_per_m: f64,
+    /// What is worth knowing here.
+    pub notes: Vec<Note>,
+}

@@ -1,0 +1,122 @@
+//! A job made ready for computing: what the page and the command line ask.
+
+use std::f64::consts::PI;
+
+use crate::air::{Air, AirError};
+use crate::blade::{Blade, BladeError};
+use crate::job::{FlightPoint, Job, PitchControl};
+use crate::result::{Analysis, PointResult, PropellerFigures};
+use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
+use crate::{fit, report};
+
+/// A job ready for computing.
+#[derive(Clone, Debug)]
+pub struct Rig {
+    /// The job as checked.
+    pub job: Job,
+    /// Its propeller.
+    pub rotor: Rotor,
+}
+
+impl Rig {
+    /// Makes a job ready.
+    ///
+    /// # Errors
+    /// Only for a job that [`Job::check`] refuses.
+    ///
+    /// ```
+    /// use spokeshave::{job::{DEMOS, Job}, rig::Rig};
+    /// let job = Job::from_json(DEMOS[0].json).unwrap();
+    /// let analysis = Rig::new(&job).unwrap().analysis();
+    /// assert_eq!(analysis.flight_points.len(), job.flight_points.len());
+    /// ```
+    pub fn new(job: &Job) -> Result<Self, BladeError> {
+        Ok(Self { rotor: Rotor::new(Blade::new(job)?, &job.method), job: job.clone() })
+    }
+
+    /// Every flight point worked out.
+    #[must_use]
+    pub fn analysis(&self) -> Analysis {
+        Analysis {
+            spokeshave: crate::job::VERSION,
+            title: self.job.title.clone(),
+            propeller: self.propeller_figures(),
+            flight_points: (0..self.job.flight_points.len()).filter_map(|i| self.point(i)).collect(),
+        }
+    }
+
+    /// Figures that no flight point changes.
+    #[must_use]
+    pub fn propeller_figures(&self) -> PropellerFigures {
+        let blade = &self.rotor.blade;
+        PropellerFigures {
+            blades: blade.count,
+            diameter_m: 2.0 * blade.radius_m,
+            activity_factor: blade.activity_factor(),
+            solidity: blade.solidity(),
+            blade_angle_075_deg: blade.cut(0.75 * blade.radius_m).angle_rad.to_degrees(),
+            geometric_pitch_m: blade.pitch_075_m(0.0),
+        }
+    }
+
+    /// One flight point worked out; `None` when there is no such point.
+    #[must_use]
+    pub fn point(&self, index: usize) -> Option<PointResult> {
+        let point = self.job.flight_points.get(index)?;
+        let air = air_of(point).ok()?;
+        Some(match fit::condition(self, point, air) {
+            Ok(at) => report::point(&self.rotor, point, &at),
+            Err(state) => report::unanswered(point, &air, state, self.turn_rad()),
+        })
+    }
+
+    /// The condition of a flight point; `None` when it has no answer.
+    #[must_use]
+    pub fn condition(&self, index: usize) -> Option<Condition> {
+        let point = self.job.flight_points.get(index)?;
+        fit::condition(self, point, air_of(point).ok()?).ok()
+    }
+
+    /// Coefficient curves at a flight point's rpm and air.
+    #[must_use]
+    pub fn curves(&self, index: usize, steps: u32) -> Vec<CurvePoint> {
+        self.condition(index).map_or_else(Vec::new, |at| coefficient_curves(&self.rotor, &at, steps))
+    }
+
+    /// The departure map at a flight point's air, along [`fit::line`], from the hub to the tip.
+    #[must_use]
+    pub fn map(&self, index: usize, speeds: u32, radii: u32) -> Option<DepartureMap> {
+        let at = self.condition(index)?;
+        let line = fit::line(self, &at, speeds);
+        Some(departure_map(&self.rotor, &line, &self.map_radii_m(radii)))
+    }
+
+    /// How far the blades are turned in the hub, rad.
+    #[must_use]
+    pub fn turn_rad(&self) -> f64 {
+        match self.job.propeller.pitch_control {
+            PitchControl::GroundAdjustable { turn_deg } => turn_deg.to_radians(),
+            PitchControl::Fixed {} | PitchControl::ConstantSpeed { .. } => 0.0,
+        }
+    }
+
+    /// Radii strictly between hub and tip, evenly spaced.
+    fn map_radii_m(&self, count: u32) -> Vec<f64> {
+        let (rh, rt) = (self.rotor.blade.hub_radius_m, self.rotor.blade.radius_m);
+        (0..count).map(|i| rh + (rt - rh) * (f64::from(i) + 0.5) / f64::from(count)).collect()
+    }
+}
+
+/// The air of a flight point.
+///
+/// # Errors
+/// A height or temperature outside the standard atmosphere, which [`Job::check`] refuses.
+pub fn air_of(point: &FlightPoint) -> Result<Air, AirError> {
+    Air::standard(point.altitude_m, point.isa_offset_k)
+}
+
+/// Speed of rotation, rad/s, of a propeller rpm.
+#[must_use]
+pub fn rotation_rad_s(rpm: f64) -> f64 {
+    rpm * PI / 30.0
+}

@@ -1,0 +1,267 @@
+//! One element of the blade in balance: the inflow angle at which blade forces and momentum agree.
+//!
+//! With `W sin φ = V + u`, `W cos φ = Ω r − v`, `α = β − φ`, `cn = cl cos φ − cd sin φ`, `ct = cl sin φ + cd cos φ` and
+//! `σ = B c/(2π r)`, momentum with Prandtl's factor F and drag included in both equations is
+//! `dT/dr = 4π r ρ F |V + u| u`, `dQ/dr = 4π r² ρ F |V + u| v`. Eliminating W leaves one residual in φ without a singular
+//! denominator (the idea of S. A. Ning, Wind Energy 17(9), 2014, and of his 2021 form for the static case):
+//!
+//! `R(φ) = Ω r N − V M`, `M = 4 F |sin φ| cos φ + σ ct`, `N = 4 F sin φ |sin φ| − σ cn`, or in the windmill brake state
+//! (M. L. Buhl, NREL/TP-500-36834, 2005) `N = 4 F sin φ [(5/3 − F) sin φ + sqrt(−σ cn/2 − F (4/3 − F) sin² φ)]`.
+//!
+//! Where the residual has several roots, the one of least `|α|` counts: it is found by marching outward from
+//! α = 0 and needs no history.
+
+use std::f64::consts::{FRAC_PI_2, PI};
+
+use roots::{SimpleConvergency, find_root_brent};
+
+use super::loss::Ends;
+use crate::section::{Coefficients, Local};
+
+/// The section at an element: one family, or two blended.
+#[derive(Clone, Copy, Debug)]
+pub struct Blend<'f> {
+    inner: Local<'f>,
+    outer: Option<(Local<'f>, f64)>,
+}
+
+impl<'f> Blend<'f> {
+    /// One family, or two with the share of the second.
+    #[must_use]
+    pub fn new(inner: Local<'f>, outer: Option<(Local<'f>, f64)>) -> Self {
+        Self { inner, outer }
+    }
+
+    /// Lift and drag coefficients at an angle of attack, rad.
+    #[must_use]
+    pub fn at(&self, alpha_rad: f64) -> Coefficients {
+        let a = self.inner.at(alpha_rad);
+        match &self.outer {
+            None => a,
+            Some((outer, w)) => {
+                let b = outer.at(alpha_rad);
+                Coefficients { cl: a.cl + w * (b.cl - a.cl), cd: a.cd + w * (b.cd - a.cd) }
+            }
+        }
+    }
+
+    /// The parts with their shares.
+    pub fn parts(&self) -> impl Iterator<Item = (&Local<'f>, f64)> {
+        let share = self.outer.as_ref().map_or(0.0, |o| o.1);
+        std::iter::once((&self.inner, 1.0 - share)).chain(self.outer.iter().map(|(l, w)| (l, *w)))
+    }
+
+    /// Angle of greatest lift, rad.
+    #[must_use]
+    pub fn stall_rad(&self) -> f64 {
+        self.parts().map(|(l, w)| w * l.landmarks().stall).sum()
+    }
+
+    /// Angle of greatest lift downward, rad.
+    #[must_use]
+    pub fn negative_stall_rad(&self) -> f64 {
+        self.parts().map(|(l, w)| w * l.landmarks().negative_stall).sum()
+    }
+}
+
+/// One element before its balance is found.
+#[derive(Clone, Copy, Debug)]
+pub struct Element<'f> {
+    /// Axial speed V into the disc, m/s, not below zero.
+    pub axial_m_s: f64,
+    /// Speed of turning Ω r, m/s, above zero.
+    pub turning_m_s: f64,
+    /// Blade angle to the chord line, rad.
+    pub angle_rad: f64,
+    /// Local solidity `B c/(2π r)`.
+    pub solidity: f64,
+    /// Geometry of Prandtl's loss.
+    pub ends: Ends,
+    /// The section.
+    pub section: Blend<'f>,
+}
+
+/// An element in balance.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Balance {
+    /// Inflow angle φ, rad.
+    pub inflow_rad: f64,
+    /// Angle of attack, rad.
+    pub alpha_rad: f64,
+    /// Coefficients there.
+    pub section: Coefficients,
+    /// Prandtl's factor F.
+    pub loss: f64,
+    /// Speed W at which the air meets the blade, m/s.
+    pub speed_m_s: f64,
+    /// Induced axial velocity u at the disc, m/s.
+    pub induced_axial_m_s: f64,
+    /// Induced swirl v at the disc, m/s.
+    pub induced_swirl_m_s: f64,
+    /// Whether Buhl's relation for high induction was used.
+    pub windmill_brake: bool,
+    /// How often the section was looked up.
+    pub lookups: u32,
+}
+
+impl Balance {
+    /// Force coefficients along the axis, `cn`, and against the turning, `ct`.
+    #[must_use]
+    pub fn normal_and_tangential(&self) -> (f64, f64) {
+        let (s, c) = self.inflow_rad.sin_cos();
+        let k = self.section;
+        (k.cl * c - k.cd * s, k.cl * s + k.cd * c)
+    }
+}
+
+/// Nearest approach to φ = 0, where the residual may jump, rad.
+const NEAR_ZERO_RAD: f64 = 1e-7;
+/// Below this angle the march halves its distance to zero instead of stepping, rad.
+const HALVING_RAD: f64 = 0.02;
+/// March step, rad.
+const STEP_RAD: f64 = 0.5 * PI / 180.0;
+const CONVERGED_RAD: f64 = 1e-12;
+const MOST_PASSES: usize = 100;
+
+struct Terms {
+    sin: f64,
+    cos: f64,
+    loss: f64,
+    section: Coefficients,
+    m: f64,
+    n: f64,
+    windmill_brake: bool,
+}
+
+impl Element<'_> {
+    /// Finds the balance; `None` at the ends of the blade or where no root exists.
+    #[must_use]
+    pub fn balance(&self) -> Option<Balance> {
+        if self.ends.bare() {
+            return None;
+        }
+        let lookups = std::cell::Cell::new(1);
+        let residual = |phi: f64| {
+            lookups.set(lookups.get() + 1);
+            let t = self.terms(phi);
+            self.turning_m_s * t.n - self.axial_m_s * t.m
+        };
+        let (brackets, count) = self.brackets();
+        let phi = brackets[..count].iter().find_map(|&(lo, hi)| self.nearest_root(lo, hi, &residual))?;
+        Some(self.balanced(phi, lookups.get() + 1))
+    }
+
+    fn terms(&self, phi: f64) -> Terms {
+        let (sin, cos) = phi.sin_cos();
+        let section = self.section.at(self.angle_rad - phi);
+        let loss = self.ends.factor(sin.abs());
+        let sigma_cn = self.solidity * (section.cl * cos - section.cd * sin);
+        let sigma_ct = self.solidity * (section.cl * sin + section.cd * cos);
+        let windmill_brake = self.axial_m_s > 0.0 && sin > 0.0 && -sigma_cn > 8.0 / 3.0 * loss * sin * sin;
+        let n = if windmill_brake {
+            let root = (-0.5 * sigma_cn - loss * (4.0 / 3.0 - loss) * sin * sin).max(0.0).sqrt();
+            4.0 * loss * sin * ((5.0 / 3.0 - loss) * sin + root)
+        } else {
+            4.0 * loss * sin * sin.abs() - sigma_cn
+        };
+        let m = 4.0 * loss * sin.abs() * cos + sigma_ct;
+        Terms { sin, cos, loss, section, m, n, windmill_brake }
+    }
+
+    /// Where to look, in order. Below the limit in the last case the only root above zero is a spurious one held by
+    /// drag swirl, and above it the flow is reversed.
+    fn brackets(&self) -> ([(f64, f64); 3], usize) {
+        const AHEAD: (f64, f64) = (NEAR_ZERO_RAD, FRAC_PI_2);
+        const REVERSED: (f64, f64) = (-FRAC_PI_2, -NEAR_ZERO_RAD);
+        const BEHIND: (f64, f64) = (FRAC_PI_2, PI - NEAR_ZERO_RAD);
+        let (v, u) = (self.axial_m_s, self.turning_m_s);
+        let cl0 = self.section.at(self.angle_rad).cl;
+        if v == 0.0 {
+            return if cl0 >= 0.0 { ([AHEAD, REVERSED, BEHIND], 2) } else { ([REVERSED, AHEAD, BEHIND], 2) };
+        }
+        if cl0 < 0.0 && self.solidity * cl0.abs() * u * u >= 2.0 * v * v {
+            ([REVERSED, AHEAD, BEHIND], 3)
+        } else {
+            ([AHEAD, BEHIND, REVERSED], 3)
+        }
+    }
+
+    /// The root of least `|α|` between two inflow angles.
+    ///
+    /// Between the stall angles lift rises with α, so that at most one root lies on either side of α = 0 and two
+    /// looks tell; beyond them the march takes small steps.
+    fn nearest_root(&self, lo: f64, hi: f64, residual: &impl Fn(f64) -> f64) -> Option<f64> {
+        let start = self.angle_rad.clamp(lo, hi);
+        let at_start = residual(start);
+        let down = (self.angle_rad - self.section.stall_rad().max(0.0)).clamp(lo, start);
+        let up = (self.angle_rad - self.section.negative_stall_rad().min(0.0)).clamp(start, hi);
+        // The residual rises through the wanted root: look where it should be first.
+        let sides = if at_start > 0.0 { [(down, lo), (up, hi)] } else { [(up, hi), (down, lo)] };
+        let mut best: Option<f64> = None;
+        for (window, end) in sides {
+            let reach = best.map_or(f64::INFINITY, |phi| (self.angle_rad - phi).abs());
+            if (self.angle_rad - window).abs() >= reach {
+                continue;
+            }
+            let found = self.first_root((start, at_start), window, end, reach, residual);
+            let nearer = |phi: &f64| (self.angle_rad - phi).abs() < reach;
+            best = found.filter(nearer).or(best);
+        }
+        best
+    }
+
+    /// The first root going from `start` over `window` in one look, then in steps to `end` or past `reach` from α = 0.
+    fn first_root(
+        &self,
+        start: (f64, f64),
+        window: f64,
+        end: f64,
+        reach: f64,
+        residual: &impl Fn(f64) -> f64,
+    ) -> Option<f64> {
+        let mut here = start;
+        let mut next = if window == start.0 { stepped(start.0, end) } else { window };
+        while here.0 != end && (self.angle_rad - here.0).abs() < reach {
+            let there = (next, residual(next));
+            if there.1 == 0.0 {
+                return Some(there.0);
+            }
+            if here.1.is_sign_negative() != there.1.is_sign_negative() {
+                let mut rule = SimpleConvergency { eps: CONVERGED_RAD, max_iter: MOST_PASSES };
+                return find_root_brent(here.0, there.0, residual, &mut rule).ok();
+            }
+            here = there;
+            next = stepped(here.0, end);
+        }
+        None
+    }
+
+    fn balanced(&self, phi: f64, lookups: u32) -> Balance {
+        let t = self.terms(phi);
+        let four_fs = 4.0 * t.loss * t.sin.abs();
+        let (a, c) = (t.n / four_fs, t.m / four_fs);
+        let speed = (self.axial_m_s * a + self.turning_m_s * c) / (a * a + c * c);
+        Balance {
+            inflow_rad: phi,
+            alpha_rad: self.angle_rad - phi,
+            section: t.section,
+            loss: t.loss,
+            speed_m_s: speed,
+            induced_axial_m_s: speed * t.sin - self.axial_m_s,
+            induced_swirl_m_s: self.turning_m_s - speed * t.cos,
+            windmill_brake: t.windmill_brake,
+            lookups,
+        }
+    }
+}
+
+/// One step from `phi` towards `end`; steps halve towards φ = 0.
+fn stepped(phi: f64, end: f64) -> f64 {
+    let towards_zero = end.abs() < phi.abs() && end.abs() <= NEAR_ZERO_RAD;
+    if towards_zero && phi.abs() <= HALVING_RAD {
+        let half = 0.5 * phi;
+        return if half.abs() <= NEAR_ZERO_RAD { end } else { half };
+    }
+    let step = STEP_RAD.copysign(end - phi);
+    if (end - phi).abs() <= STEP_RAD { end } else { phi + step }
+}

@@ -1,0 +1,49 @@
+//! Prandtl's loss at tip and hub.
+//!
+//! `F = F_tip F_hub`, each `(2/π) acos(e^−f)` with `f_tip = B/2 (R − r)/(r |sin φ|)` and the choice
+//! `f_hub = B/2 (r − rh)/(rh |sin φ|)`. Source: L. Prandtl's appendix to A. Betz, *Schraubenpropeller mit
+//! geringstem Energieverlust*, 1919; H. Glauert, *Airplane Propellers*, 1935.
+
+/// From this exponent on the loss is nothing within rounding.
+const NO_LOSS: f64 = 36.0;
+
+/// Geometry of the loss at one radius: `B/2 (R − r)/r` and `B/2 (r − rh)/rh`.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Ends {
+    tip: f64,
+    hub: f64,
+}
+
+impl Ends {
+    /// For a radius between hub and tip; without hub loss only the tip counts.
+    #[must_use]
+    pub fn new(blades: f64, radius_m: f64, tip_radius_m: f64, hub_radius_m: f64, hub_loss: bool) -> Self {
+        let tip = 0.5 * blades * (tip_radius_m - radius_m) / radius_m;
+        let hub = if hub_loss && hub_radius_m > 0.0 {
+            0.5 * blades * (radius_m - hub_radius_m) / hub_radius_m
+        } else {
+            f64::INFINITY
+        };
+        Self { tip, hub }
+    }
+
+    /// Whether the load is nothing here by definition.
+    #[must_use]
+    pub fn bare(&self) -> bool {
+        self.tip <= 0.0 || self.hub <= 0.0
+    }
+
+    /// The factor F at an inflow angle given by `|sin φ|`.
+    #[must_use]
+    pub fn factor(&self, sin_phi: f64) -> f64 {
+        one_end(self.tip, sin_phi) * one_end(self.hub, sin_phi)
+    }
+}
+
+fn one_end(geometry: f64, sin_phi: f64) -> f64 {
+    // As sin φ → 0 the exponent grows without bound and F → 1.
+    if geometry >= NO_LOSS * sin_phi {
+        return 1.0;
+    }
+    std::f64::consts::FRAC_2_PI * (-geometry / sin_phi).exp().acos()
+}

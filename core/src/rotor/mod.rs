@@ -1,0 +1,170 @@
+//! Blade-element momentum: the propeller at one condition, by elements and at its stations.
+//!
+//! Method: annuli independent of one another (steady axial flow), each in the balance of [`element`]; integration by the midpoint
+//! rule on cosine-spaced elements between hub and tip, which never touches the ends, where the load is nothing by definition.
+//! Choice: Reynolds and Mach number of an element are those of `hypot(V, Ω r)`, fixed during the solve.
+
+pub mod element;
+pub mod loss;
+mod map;
+mod sweep;
+
+pub use map::{DepartureMap, MapCell, departure_map};
+pub use sweep::{Coefficients, CurvePoint, coefficient_curves, curve_point, thrustless_speed_m_s};
+
+use std::f64::consts::PI;
+
+use crate::air::Air;
+use crate::blade::{Blade, Cut};
+use crate::job::Method;
+use crate::section::{Local, Situation};
+use element::{Balance, Blend, Element};
+use loss::Ends;
+
+/// One steady condition of a propeller.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Condition {
+    /// The air.
+    pub air: Air,
+    /// Axial true airspeed, m/s, not below zero.
+    pub airspeed_m_s: f64,
+    /// Speed of rotation Ω, rad/s, above zero.
+    pub rotation_rad_s: f64,
+    /// Angle the blades are turned in the hub, rad.
+    pub turn_rad: f64,
+}
+
+impl Condition {
+    /// Revolutions per second.
+    #[must_use]
+    pub fn turns_per_s(&self) -> f64 {
+        self.rotation_rad_s / (2.0 * PI)
+    }
+}
+
+/// Thrust and torque of one propeller.
+#[derive(Clone, Copy, Debug, Default, PartialEq)]
+pub struct Loads {
+    /// Thrust, N, positive forward.
+    pub thrust_n: f64,
+    /// Torque, N m, positive when the engine supplies it.
+    pub torque_n_m: f64,
+    /// How often sections were looked up.
+    pub lookups: u32,
+    /// Elements for which no balance was found; they carry no load.
+    pub unbalanced: u32,
+}
+
+/// An element's geometry with what does not change from condition to condition.
+#[derive(Clone, Copy, Debug)]
+pub struct Ring {
+    /// The blade here.
+    pub cut: Cut,
+    ends: Ends,
+    solidity: f64,
+    /// Width for the integral, m.
+    width_m: f64,
+    /// Snel's factor `3.1 (c/r)²`, faded out towards the tip; 0 when switched off.
+    stall_delay: f64,
+}
+
+/// A propeller ready for any condition.
+#[derive(Clone, Debug)]
+pub struct Rotor {
+    /// The blade.
+    pub blade: Blade,
+    method: Method,
+    rings: Vec<Ring>,
+}
+
+impl Rotor {
+    /// A propeller by its blade and the method's settings.
+    #[must_use]
+    pub fn new(blade: Blade, method: &Method) -> Self {
+        let n = method.elements;
+        let (rh, span) = (blade.hub_radius_m, blade.radius_m - blade.hub_radius_m);
+        let mut rotor = Self { blade, method: method.clone(), rings: Vec::new() };
+        let step = PI / f64::from(n);
+        rotor.rings = (0..n)
+            .map(|i| {
+                let t = (f64::from(i) + 0.5) * step;
+                let mut ring = rotor.ring(rh + 0.5 * span * (1.0 - t.cos()));
+                ring.width_m = 0.5 * span * t.sin() * step;
+                ring
+            })
+            .collect();
+        rotor
+    }
+
+    /// The element at a radius, m.
+    #[must_use]
+    pub fn ring(&self, radius_m: f64) -> Ring {
+        let (blade, b) = (&self.blade, f64::from(self.blade.count));
+        let cut = blade.cut(radius_m);
+        let delay = 3.1 * (cut.chord_m / radius_m).powi(2) * delay_fade(radius_m / blade.radius_m);
+        Ring {
+            cut,
+            ends: Ends::new(b, radius_m, blade.radius_m, blade.hub_radius_m, self.method.hub_loss),
+            solidity: b * cut.chord_m / (2.0 * PI * radius_m),
+            width_m: 0.0,
+            stall_delay: if self.method.stall_delay { delay } else { 0.0 },
+        }
+    }
+
+    /// The element of a ring at a condition, with its section's Reynolds and Mach number.
+    #[must_use]
+    pub fn element(&self, ring: &Ring, at: &Condition) -> (Element<'_>, Situation) {
+        let turning = at.rotation_rad_s * ring.cut.radius_m;
+        let speed = at.airspeed_m_s.hypot(turning);
+        let situation = Situation {
+            thickness_ratio: ring.cut.thickness_ratio,
+            reynolds: at.air.density_kg_m3 * speed * ring.cut.chord_m / at.air.viscosity_pa_s,
+            mach: if self.method.compressibility { speed / at.air.sound_speed_m_s } else { 0.0 },
+            stall_delay: (ring.stall_delay * (turning / speed).powi(2)).min(1.0),
+        };
+        let mix = ring.cut.section;
+        let local = |i: usize| Local::new(&self.blade.families[i], situation);
+        let outer = (mix.share > 0.0).then(|| (local(mix.outer), mix.share));
+        let element = Element {
+            axial_m_s: at.airspeed_m_s,
+            turning_m_s: turning,
+            angle_rad: ring.cut.angle_rad + at.turn_rad,
+            solidity: ring.solidity,
+            ends: ring.ends,
+            section: Blend::new(local(mix.inner), outer),
+        };
+        (element, situation)
+    }
+
+    /// Thrust and torque per metre of radius, all blades: `ρ/2 W² c B cn` and `ρ/2 W² c B ct r`.
+    #[must_use]
+    pub fn grading(&self, ring: &Ring, at: &Condition, balance: &Balance) -> (f64, f64) {
+        let (cn, ct) = balance.normal_and_tangential();
+        let w = balance.speed_m_s;
+        let head = 0.5 * at.air.density_kg_m3 * w * w * ring.cut.chord_m * f64::from(self.blade.count);
+        (head * cn, head * ct * ring.cut.radius_m)
+    }
+
+    /// Thrust and torque at a condition.
+    #[must_use]
+    pub fn loads(&self, at: &Condition) -> Loads {
+        let mut sum = Loads::default();
+        for ring in &self.rings {
+            match self.element(ring, at).0.balance() {
+                Some(balance) => {
+                    let (thrust, torque) = self.grading(ring, at, &balance);
+                    sum.thrust_n += thrust * ring.width_m;
+                    sum.torque_n_m += torque * ring.width_m;
+                    sum.lookups += balance.lookups;
+                }
+                None => sum.unbalanced += 1,
+            }
+        }
+        sum
+    }
+}
+
+/// Stall delay is full up to 0.7 R and gone from 0.8 R on.
+fn delay_fade(radius_fraction: f64) -> f64 {
+    ((0.8 - radius_fraction) / 0.1).clamp(0.0, 1.0)
+}

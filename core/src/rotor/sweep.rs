@@ -1,0 +1,89 @@
+//! Coefficients of a propeller, and how they run with advance ratio.
+
+use std::f64::consts::TAU;
+
+use serde::Serialize;
+
+use super::{Condition, Loads, Rotor};
+
+/// Coefficients of one propeller at one condition.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct Coefficients {
+    /// `J = V/(n D)`.
+    pub advance_ratio: f64,
+    /// `CT = T/(ρ n² D⁴)`.
+    pub ct: f64,
+    /// `CP = 2π n Q/(ρ n³ D⁵)`.
+    pub cp: f64,
+    /// `CQ = CP/2π`.
+    pub cq: f64,
+    /// `T V/P` where thrust, speed and power are positive.
+    pub efficiency: Option<f64>,
+}
+
+impl Coefficients {
+    /// From the loads at a condition, for a diameter in m.
+    #[must_use]
+    pub fn new(loads: &Loads, at: &Condition, diameter_m: f64) -> Self {
+        let (n, d) = (at.turns_per_s(), diameter_m);
+        let head = at.air.density_kg_m3 * n * n * d.powi(4);
+        let cq = loads.torque_n_m / (head * d);
+        let power = loads.torque_n_m * at.rotation_rad_s;
+        let useful = loads.thrust_n > 0.0 && at.airspeed_m_s > 0.0 && power > 0.0;
+        Self {
+            advance_ratio: at.airspeed_m_s / (n * d),
+            ct: loads.thrust_n / head,
+            cp: TAU * cq,
+            cq,
+            efficiency: useful.then(|| loads.thrust_n * at.airspeed_m_s / power),
+        }
+    }
+}
+
+/// One point of the coefficient curves.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct CurvePoint {
+    /// True airspeed, m/s.
+    pub airspeed_m_s: f64,
+    /// Thrust, N.
+    pub thrust_n: f64,
+    /// Shaft power, W.
+    pub power_w: f64,
+    /// The coefficients.
+    #[serde(flatten)]
+    pub coefficients: Coefficients,
+}
+
+/// The curves at constant rpm and air, at rest and then at `steps` equal steps of speed up to where the thrust is gone.
+#[must_use]
+pub fn coefficient_curves(rotor: &Rotor, at: &Condition, steps: u32) -> Vec<CurvePoint> {
+    let end = thrustless_speed_m_s(rotor, at);
+    (0..=steps).map(|i| curve_point(rotor, at, end * f64::from(i) / f64::from(steps))).collect()
+}
+
+/// The curve point at a speed, m/s, with everything else of the condition kept.
+#[must_use]
+pub fn curve_point(rotor: &Rotor, at: &Condition, airspeed_m_s: f64) -> CurvePoint {
+    let here = Condition { airspeed_m_s, ..*at };
+    let loads = rotor.loads(&here);
+    CurvePoint {
+        airspeed_m_s,
+        thrust_n: loads.thrust_n,
+        power_w: loads.torque_n_m * here.rotation_rad_s,
+        coefficients: Coefficients::new(&loads, &here, 2.0 * rotor.blade.radius_m),
+    }
+}
+
+/// The speed (m/s) at which thrust is gone, by steps of a tenth in J and halving; at most J = 6.
+pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
+    let unit = at.turns_per_s() * 2.0 * rotor.blade.radius_m;
+    let thrust = |j: f64| rotor.loads(&Condition { airspeed_m_s: j * unit, ..*at }).thrust_n;
+    let steps = (1..=60).map(|i| 0.1 * f64::from(i));
+    let Some(over) = steps.clone().find(|&j| thrust(j) < 0.0) else { return 6.0 * unit };
+    let (mut low, mut high) = (over - 0.1, over);
+    for _ in 0..20 {
+        let middle = 0.5 * (low + high);
+        if thrust(middle) < 0.0 { high = middle } else { low = middle }
+    }
+    low.max(0.1) * unit
+}
