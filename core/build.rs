@@ -42,6 +42,7 @@ struct PackedFamily {
     origin: String,
     korn_factor: f64,
     face_angle_deg: Vec<(f64, f64)>,
+    outline: String,
     polars: Vec<PackedPolar>,
 }
 
@@ -106,6 +107,7 @@ fn pack(folder: &Path) -> Result<PackedFamily, Box<dyn Error>> {
         origin: family.origin,
         korn_factor: family.korn_ka,
         face_angle_deg: family.face_angle_deg.iter().map(|f| (f.thickness_ratio, f.angle_deg)).collect(),
+        outline: std::fs::read_to_string(folder.join("outline.dat")).unwrap_or_default(),
         polars,
     })
 }

@@ -1,10 +1,10 @@
 //! From the balance of elements to the figures and stations of a flight point.
 
-use std::f64::consts::{PI, TAU};
+use std::f64::consts::PI;
 
 use crate::air::Air;
 use crate::job::FlightPoint;
-use crate::result::{Figures, Note, PointResult, State, StationResult};
+use crate::result::{Figures, Note, PointResult, SectionPoint, State, StationResult};
 use crate::rotor::element::{Balance, Element};
 use crate::rotor::{Coefficients, Condition, Loads, Ring, Rotor};
 use crate::section::{Best, Situation, best, working_band};
@@ -117,6 +117,19 @@ pub fn station(rotor: &Rotor, ring: &Ring, at: &Condition) -> StationResult {
     s
 }
 
+/// Coefficients over angle of attack as the station's section has them at a condition, −12° to 24° by quarter degrees.
+#[must_use]
+pub fn section_curve(rotor: &Rotor, ring: &Ring, at: &Condition) -> Vec<SectionPoint> {
+    let element = rotor.element(ring, at).0;
+    (-48..=96)
+        .map(|i| {
+            let alpha_deg = f64::from(i) * 0.25;
+            let c = element.section.at(alpha_deg.to_radians());
+            SectionPoint { alpha_deg, cl: c.cl, cd: c.cd, lift_to_drag: c.cl / c.cd }
+        })
+        .collect()
+}
+
 fn best_of(element: &Element) -> Option<Best> {
     best(|a| element.section.at(a), element.section.stall_rad())
 }
@@ -195,10 +208,4 @@ fn point_notes(stations: &[StationResult], loads: &Loads) -> Vec<Note> {
         notes.push(Note::NoBalance);
     }
     notes
-}
-
-/// Advance per turn, m, of a condition.
-#[must_use]
-pub fn advance_per_turn_m(at: &Condition) -> f64 {
-    at.airspeed_m_s * TAU / at.rotation_rad_s
 }

@@ -229,3 +229,16 @@ pub struct StationResult {
     /// What is worth knowing here.
     pub notes: Vec<Note>,
 }
+
+/// Coefficients of a section at one angle of attack.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct SectionPoint {
+    /// Angle of attack, degrees.
+    pub alpha_deg: f64,
+    /// Lift coefficient.
+    pub cl: f64,
+    /// Drag coefficient.
+    pub cd: f64,
+    /// Lift over drag.
+    pub lift_to_drag: f64,
+}

@@ -5,7 +5,7 @@ use std::f64::consts::PI;
 use crate::air::{Air, AirError};
 use crate::blade::{Blade, BladeError};
 use crate::job::{FlightPoint, Job, PitchControl};
-use crate::result::{Analysis, PointResult, PropellerFigures};
+use crate::result::{Analysis, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
 use crate::{fit, report};
 
@@ -81,6 +81,14 @@ impl Rig {
     #[must_use]
     pub fn curves(&self, index: usize, steps: u32) -> Vec<CurvePoint> {
         self.condition(index).map_or_else(Vec::new, |at| coefficient_curves(&self.rotor, &at, steps))
+    }
+
+    /// Lift, drag and lift-to-drag of a station's section over the angle of attack, as it works at a flight point.
+    #[must_use]
+    pub fn section_curve(&self, point: usize, station: usize) -> Vec<SectionPoint> {
+        let radius = self.rotor.blade.station_radii_m().nth(station);
+        let (Some(at), Some(r)) = (self.condition(point), radius) else { return Vec::new() };
+        report::section_curve(&self.rotor, &self.rotor.ring(r), &at)
     }
 
     /// The departure map at a flight point's air, along [`fit::line`], from the hub to the tip.

@@ -8,6 +8,7 @@ use std::sync::{Arc, OnceLock};
 use serde::Deserialize;
 
 use super::family::{About, Family};
+use super::outline::Outline;
 use super::polar::{FEWEST_POINTS, Polar, PolarPoint};
 
 #[derive(Deserialize)]
@@ -17,6 +18,7 @@ struct PackedFamily {
     origin: String,
     korn_factor: f64,
     face_angle_deg: Vec<(f64, f64)>,
+    outline: String,
     polars: Vec<PackedPolar>,
 }
 
@@ -35,6 +37,7 @@ struct PackedPolar {
 #[derive(Debug)]
 struct Sets {
     name: String,
+    outline: Option<Outline>,
     by_n: Vec<(f64, Arc<Family>)>,
 }
 
@@ -69,6 +72,13 @@ impl Library {
         sets.iter().min_by(|a, b| off(a.0).total_cmp(&off(b.0))).map(|(_, family)| family)
     }
 
+    /// The outline of a family at a thickness ratio, where the family has one and it can be drawn that thick.
+    #[must_use]
+    pub fn outline(&self, name: &str, thickness_ratio: f64) -> Option<Outline> {
+        let base = self.families.iter().find(|f| f.name == name)?.outline.as_ref()?;
+        base.scaled_to(thickness_ratio).ok()
+    }
+
     /// The values of n for which a family has tables.
     #[must_use]
     pub fn n_crits(&self, name: &str) -> Vec<f64> {
@@ -82,7 +92,7 @@ fn unpacked(packed: &PackedFamily) -> Sets {
     ns.sort_by(f64::total_cmp);
     ns.dedup();
     let by_n = ns.into_iter().filter_map(|n| Some((n, Arc::new(one_set(packed, n)?)))).collect();
-    Sets { name: packed.name.clone(), by_n }
+    Sets { name: packed.name.clone(), outline: Outline::read(&packed.outline).ok(), by_n }
 }
 
 fn one_set(packed: &PackedFamily, n: f64) -> Option<Family> {
