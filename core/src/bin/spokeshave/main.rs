@@ -1,2 +1,68 @@
 //! The command line, thin over the library.
-fn main() {}
+//!
+//! Exit codes: 0 answered, 1 no answer (a flight point or request has none), 2 bad input (message on standard error).
+
+mod analyse;
+mod input;
+mod map;
+mod sections;
+mod sweep;
+mod table;
+
+use std::process::ExitCode;
+
+use clap::{Parser, Subcommand};
+
+/// Fits a propeller to one aircraft and engine, and shows how far each station departs from its best angle.
+#[derive(Parser)]
+#[command(version, about, max_term_width = 100, after_help = EXAMPLES)]
+struct Cli {
+    #[command(subcommand)]
+    command: Command,
+}
+
+const EXAMPLES: &str = "Examples:
+  spokeshave analyse --demo light-aeroplane        the departure table of an invented job
+  spokeshave analyse JOB.json --json               the same for programs, SI units
+  spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
+  spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
+  spokeshave demo light-aeroplane > JOB.json       a job file to start from
+  spokeshave schema                                the JSON Schema of the job file
+  spokeshave sections                              the section families and where their tables come from
+
+Exit codes: 0 answered, 1 no answer, 2 bad input.";
+
+#[derive(Subcommand)]
+enum Command {
+    /// Work out every flight point of a job: figures and stations
+    Analyse(analyse::Args),
+    /// Coefficients over speed at a flight point's rpm and air
+    Sweep(sweep::Args),
+    /// Departure over speed and radius at a flight point's air
+    Map(map::Args),
+    /// List the section families, or the tables of one
+    Sections(sections::Args),
+    /// Print an invented job file to start from
+    Demo(input::DemoArgs),
+    /// Print the JSON Schema of the job file
+    Schema,
+}
+
+fn main() -> ExitCode {
+    let outcome = match Cli::parse().command {
+        Command::Analyse(args) => analyse::run(&args),
+        Command::Sweep(args) => sweep::run(&args),
+        Command::Map(args) => map::run(&args),
+        Command::Sections(args) => sections::run(&args),
+        Command::Demo(args) => input::run_demo(&args),
+        Command::Schema => input::run_schema(),
+    };
+    match outcome {
+        Ok(answered) => ExitCode::from(u8::from(!answered)),
+        Err(input::Stop::ClosedPipe) => ExitCode::SUCCESS,
+        Err(input::Stop::BadInput(message)) => {
+            eprintln!("spokeshave: {message}");
+            ExitCode::from(2)
+        }
+    }
+}
