@@ -8,6 +8,7 @@
 pub mod air;
 pub mod blade;
 pub mod curve;
+pub mod drawn;
 pub mod fit;
 pub mod job;
 pub mod report;

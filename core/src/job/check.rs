@@ -21,7 +21,14 @@ struct Found(Vec<Problem>);
 
 impl Found {
     fn refuse(&mut self, path: String, found: impl ToString, allowed: impl Into<String>) {
-        self.0.push(Problem { path, found: found.to_string(), allowed: allowed.into() });
+        self.0.push(Problem { path, found: found.to_string(), allowed: allowed.into(), span: None });
+    }
+
+    /// Says of the latest problem what span of values is allowed.
+    fn within(&mut self, lowest: f64, highest: f64) {
+        if let Some(problem) = self.0.last_mut() {
+            problem.span = Some((lowest, highest));
+        }
     }
 
     /// A NaN is in no range, so it is refused.
@@ -29,6 +36,7 @@ impl Found {
         if !range.contains(&value) {
             let unit = if unit.is_empty() { String::new() } else { format!(" {unit}") };
             self.refuse(path, value, format!("{} to {}{unit}", range.start(), range.end()));
+            self.within(*range.start(), *range.end());
         }
     }
 
@@ -165,6 +173,7 @@ fn check_propeller(found: &mut Found, p: &Propeller) {
     found.range(at("diameter_m"), p.diameter_m, 0.02..=12.0, "m");
     if !(p.hub_diameter_m >= 0.0 && p.hub_diameter_m <= 0.9 * p.diameter_m) {
         found.refuse(at("hub_diameter_m"), p.hub_diameter_m, "0 m to nine tenths of the diameter");
+        found.within(0.0, 0.9 * p.diameter_m);
     }
     match p.pitch_control {
         PitchControl::Fixed {} => {}
@@ -201,6 +210,7 @@ fn check_stations(found: &mut Found, job: &Job) {
         let widest = job.propeller.diameter_m;
         if !(s.chord_m > 0.0 && s.chord_m <= widest) {
             found.refuse(at("chord_m"), s.chord_m, format!("above 0, up to the diameter, {widest} m"));
+            found.within(0.0, widest);
         }
         found.range(at("thickness_ratio"), s.thickness_ratio, 0.005..=1.0, "of the chord");
         check_angle(found, &at, s);

@@ -5,7 +5,7 @@ use std::fmt;
 use thiserror::Error;
 
 /// One wrong value.
-#[derive(Clone, Debug, PartialEq, Eq)]
+#[derive(Clone, Debug, PartialEq)]
 pub struct Problem {
     /// Path in the file, such as `propeller.stations[3].chord_m`.
     pub path: String,
@@ -13,6 +13,8 @@ pub struct Problem {
     pub found: String,
     /// What is allowed.
     pub allowed: String,
+    /// Lowest and highest value allowed, in the unit the path's name ends with, where a span says it all.
+    pub span: Option<(f64, f64)>,
 }
 
 impl fmt::Display for Problem {
@@ -22,7 +24,7 @@ impl fmt::Display for Problem {
 }
 
 /// Why a job file was refused.
-#[derive(Clone, Debug, Error, PartialEq, Eq)]
+#[derive(Clone, Debug, Error, PartialEq)]
 #[non_exhaustive]
 pub enum JobError {
     /// The file is larger than any job.
