@@ -7,6 +7,7 @@ mod library;
 mod local;
 pub mod outline;
 mod polar;
+pub mod solver;
 
 pub use best::{BAND_SHARE, Best, best, working_band};
 pub use extend::{BLADE_ASPECT_RATIO, Coefficients, Extension};

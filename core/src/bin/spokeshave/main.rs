@@ -2,6 +2,7 @@
 //!
 //! Exit codes: 0 answered, 1 no answer (a flight point or request has none), 2 bad input (message on standard error).
 
+mod airfoils;
 mod analyse;
 mod input;
 mod map;
@@ -42,6 +43,8 @@ enum Command {
     Map(map::Args),
     /// List the section families, or the tables of one
     Sections(sections::Args),
+    /// Compute the tables of the section families anew
+    Airfoils(airfoils::Args),
     /// Print an invented job file to start from
     Demo(input::DemoArgs),
     /// Print the JSON Schema of the job file
@@ -54,6 +57,7 @@ fn main() -> ExitCode {
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),
+        Command::Airfoils(args) => airfoils::run(&args),
         Command::Demo(args) => input::run_demo(&args),
         Command::Schema => input::run_schema(),
     };

@@ -39,7 +39,6 @@ pub struct Outline {
     points: Vec<[f64; 2]>,
     rotation_rad: f64,
     curve: Curve,
-    nose_s: f64,
     measures: Measures,
     face: Option<Face>,
 }
@@ -77,7 +76,7 @@ impl Outline {
             return Err(OutlineError::Thickness { found, least, most });
         }
         let face = face::find(&points);
-        Ok(Self { name, points, rotation_rad: framed.rotation_rad + turn_rad, curve, nose_s, measures, face })
+        Ok(Self { name, points, rotation_rad: framed.rotation_rad + turn_rad, curve, measures, face })
     }
 
     /// The name from the first line of the list, or nothing.
@@ -138,10 +137,6 @@ impl Outline {
 
     pub(crate) fn curve(&self) -> &Curve {
         &self.curve
-    }
-
-    pub(crate) fn nose_s(&self) -> f64 {
-        self.nose_s
     }
 }
 

@@ -1,0 +1,344 @@
+//! A polar: one angle after another, each started from its neighbour.
+
+use std::ops::ControlFlow;
+
+use serde::{Deserialize, Serialize};
+
+use super::closure::Gas;
+use super::couple::{Progress, TOLERANCE, iterate};
+use super::forces::forces;
+use super::layer::{Course, Layer};
+use super::march::Drive;
+use super::potential::{Flow, Potential, Strip};
+use super::settings::{Settings, SolverError};
+use super::spacing;
+use crate::section::outline::Outline;
+
+/// Whether a point can be relied on.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, Serialize, Deserialize)]
+#[serde(rename_all = "lowercase")]
+pub enum State {
+    /// The coupled equations hold to the tolerance.
+    Converged,
+    /// They do not, or the solution is not believable: the figures of the point are void.
+    Failed,
+}
+
+/// One point of a polar.
+#[derive(Debug, Clone, Copy, PartialEq, Serialize, Deserialize)]
+pub struct Solved {
+    /// Angle of attack from the chord line, degrees.
+    pub alpha_deg: f64,
+    /// Lift coefficient; NaN where it failed.
+    pub cl: f64,
+    /// Drag coefficient.
+    pub cd: f64,
+    /// Moment coefficient about the quarter chord, nose up positive.
+    pub cm: f64,
+    /// Transition on the upper side, in chords from the nose along the chord; 1 if it stays laminar.
+    pub xtr_upper: f64,
+    /// Transition on the lower side.
+    pub xtr_lower: f64,
+    /// Newton iterations, all attempts together.
+    pub iterations: usize,
+    /// Root mean square of what the speeds lack at the end.
+    pub residual: f64,
+    /// Whether the point converged.
+    pub state: State,
+}
+
+/// Most iterations of one attempt.
+const ITERATIONS: usize = 30;
+/// Failures in a row after which a direction of the sweep is given up.
+const GIVE_UP: usize = 3;
+/// Levels of halving of a step in angle.
+const HALVINGS: u32 = 2;
+
+/// A sweep in progress: call [`Sweep::advance`] until it gives nothing.
+#[derive(Debug, Clone)]
+pub struct Sweep {
+    potential: Potential,
+    course: Course,
+    angles_deg: Vec<f64>,
+    start: usize,
+    /// Position in the order: up from the start, then down from it.
+    next: usize,
+    anchor: Option<Solution>,
+    last: Option<Solution>,
+    failures: usize,
+    points: Vec<Solved>,
+}
+
+/// A converged flow.
+#[derive(Debug, Clone)]
+struct Solution {
+    layer: Layer,
+    flow: Flow,
+    cl: f64,
+}
+
+impl Sweep {
+    /// Sets up the flow about an outline.
+    ///
+    /// # Errors
+    /// [`SolverError`] for settings or angles out of range, and for an outline about which no flow can be found.
+    pub fn new(outline: &Outline, settings: &Settings, angles_deg: &[f64]) -> Result<Self, SolverError> {
+        settings.check()?;
+        check_angles(angles_deg)?;
+        let nodes = spacing::nodes(outline, settings.nodes);
+        let singular = || SolverError::Singular { name: outline.name().to_string() };
+        let potential = Potential::new(nodes).ok_or_else(singular)?;
+        let course = Course {
+            gas: Gas::new(settings.reynolds, settings.mach),
+            n_crit: settings.n_crit,
+            trips: [settings.trip_upper, settings.trip_lower],
+            body: potential.count(),
+            gap: potential.gap(),
+        };
+        let nearest = |a: &f64, b: &f64| a.abs().total_cmp(&b.abs());
+        let start =
+            (0..angles_deg.len()).min_by(|&i, &j| nearest(&angles_deg[i], &angles_deg[j])).unwrap_or(0);
+        Ok(Self {
+            potential,
+            course,
+            angles_deg: angles_deg.to_vec(),
+            start,
+            next: 0,
+            anchor: None,
+            last: None,
+            failures: 0,
+            points: Vec::new(),
+        })
+    }
+
+    /// Computes the next angle; nothing when the sweep is over.
+    pub fn advance(&mut self) -> Option<Solved> {
+        let count = self.angles_deg.len();
+        let upward = count - self.start;
+        if self.failures >= GIVE_UP && self.next < upward {
+            self.next = upward;
+        }
+        if self.next == upward {
+            self.last.clone_from(&self.anchor);
+            self.failures = 0;
+        }
+        if self.next >= count || (self.failures >= GIVE_UP && self.next > upward) {
+            return None;
+        }
+        let index = if self.next < upward { self.start + self.next } else { count - 1 - self.next };
+        self.next += 1;
+        let point = self.solve(self.angles_deg[index]);
+        self.failures = if point.state == State::Converged { 0 } else { self.failures + 1 };
+        self.points.push(point);
+        Some(point)
+    }
+
+    /// Angles done and angles asked for; a direction that was given up counts as done.
+    #[must_use]
+    pub fn progress(&self) -> (usize, usize) {
+        (self.next.min(self.angles_deg.len()), self.angles_deg.len())
+    }
+
+    /// The points so far, by rising angle.
+    #[must_use]
+    pub fn points(&self) -> Vec<Solved> {
+        let mut points = self.points.clone();
+        points.sort_by(|a, b| a.alpha_deg.total_cmp(&b.alpha_deg));
+        points
+    }
+
+    fn solve(&mut self, alpha_deg: f64) -> Solved {
+        let mut work = Work { sweep: self, iterations: 0, residual: f64::INFINITY };
+        let found = work.find(alpha_deg.to_radians());
+        let (iterations, residual) = (work.iterations, work.residual);
+        let failed = Solved {
+            alpha_deg,
+            cl: f64::NAN,
+            cd: f64::NAN,
+            cm: f64::NAN,
+            xtr_upper: f64::NAN,
+            xtr_lower: f64::NAN,
+            iterations,
+            residual,
+            state: State::Failed,
+        };
+        let Some((solution, point)) = found else { return failed };
+        if self.anchor.is_none() {
+            self.anchor = Some(solution.clone());
+        }
+        self.last = Some(solution);
+        Solved { alpha_deg, iterations, residual, ..point }
+    }
+}
+
+fn check_angles(angles_deg: &[f64]) -> Result<(), SolverError> {
+    let rising = angles_deg.windows(2).all(|pair| pair[0] < pair[1]);
+    let within = angles_deg.iter().all(|a| a.abs() <= 30.0);
+    if rising && within && (1..=400).contains(&angles_deg.len()) {
+        return Ok(());
+    }
+    let edge = |a: Option<&f64>| a.copied().unwrap_or(f64::NAN);
+    Err(SolverError::Angles {
+        count: angles_deg.len(),
+        first_deg: edge(angles_deg.first()),
+        last_deg: edge(angles_deg.last()),
+    })
+}
+
+/// The attempts at one angle.
+struct Work<'a> {
+    sweep: &'a Sweep,
+    iterations: usize,
+    residual: f64,
+}
+
+impl Work<'_> {
+    fn find(&mut self, alpha_rad: f64) -> Option<(Solution, Solved)> {
+        let flow = Flow::new(&self.sweep.potential, alpha_rad);
+        let last = self.sweep.last.clone();
+        if let Some(last) = &last
+            && let Some(found) = self.warm(last, &flow, 1.0)
+        {
+            return Some(found);
+        }
+        if let Some(found) = self.cold(&flow) {
+            return Some(found);
+        }
+        let last = last?;
+        self.warm(&last, &flow, 0.35).or_else(|| self.halved(&last, &flow, HALVINGS))
+    }
+
+    /// From the neighbour, its speeds moved by what potential flow says of the change of angle.
+    fn warm(&mut self, last: &Solution, flow: &Flow, limit: f64) -> Option<(Solution, Solved)> {
+        let mut layer = last.layer.clone();
+        for i in 0..layer.total() {
+            layer.state[i][3] += layer.sign(i) * (flow.still[i] - last.flow.still[i]);
+        }
+        layer.follow_stagnation();
+        place_wake(&mut layer, &flow.wake);
+        self.converge(layer, flow, limit, Some(last))
+    }
+
+    /// From potential flow alone.
+    fn cold(&mut self, flow: &Flow) -> Option<(Solution, Solved)> {
+        let body = &self.sweep.potential.body;
+        let (x, arc) = stations(body, &flow.wake);
+        let mut layer = Layer::new(self.sweep.course.clone(), x, arc, &flow.still);
+        layer.march(&Drive::Cold);
+        self.converge(layer, flow, 1.0, self.sweep.last.as_ref())
+    }
+
+    /// By way of the angle half-way.
+    fn halved(&mut self, last: &Solution, flow: &Flow, levels: u32) -> Option<(Solution, Solved)> {
+        let middle = Flow::new(&self.sweep.potential, 0.5 * (last.flow.alpha_rad + flow.alpha_rad));
+        let half = match self.warm(last, &middle, 1.0) {
+            Some(found) => found.0,
+            None if levels > 1 => self.halved(last, &middle, levels - 1)?.0,
+            None => return None,
+        };
+        match self.warm(&half, flow, 1.0) {
+            None if levels > 1 => self.halved(&half, flow, levels - 1),
+            found => found,
+        }
+    }
+
+    fn converge(
+        &mut self,
+        mut layer: Layer,
+        flow: &Flow,
+        limit: f64,
+        neighbour: Option<&Solution>,
+    ) -> Option<(Solution, Solved)> {
+        let mut settled = f64::INFINITY;
+        for _ in 0..ITERATIONS {
+            self.iterations += 1;
+            let Progress { speed, layer: worst, change, part } = iterate(&mut layer, flow, settled, limit)?;
+            self.residual = speed;
+            if speed < TOLERANCE && worst < TOLERANCE && part >= 1.0 && change == settled {
+                return self.judge(layer, flow, neighbour);
+            }
+            settled = if part >= limit { change } else { f64::INFINITY };
+        }
+        None
+    }
+
+    /// Forces of a converged flow, if they can be believed.
+    fn judge(&self, layer: Layer, flow: &Flow, neighbour: Option<&Solution>) -> Option<(Solution, Solved)> {
+        let f = forces(&self.sweep.potential.body, &layer, flow.alpha_rad);
+        let fair = f.cl.abs() < 4.0 && f.cd > 0.0 && f.cd < 0.6 && f.cm.is_finite();
+        let jump = neighbour.is_some_and(|n| {
+            let turn_deg = (flow.alpha_rad - n.flow.alpha_rad).to_degrees().abs();
+            (f.cl - n.cl).abs() > 0.15 + 0.2 * turn_deg
+        });
+        if !fair || jump {
+            return None;
+        }
+        let point = Solved {
+            alpha_deg: flow.alpha_rad.to_degrees(),
+            cl: f.cl,
+            cd: f.cd,
+            cm: f.cm,
+            xtr_upper: layer.transition_x(0),
+            xtr_lower: layer.transition_x(1),
+            iterations: 0,
+            residual: 0.0,
+            state: State::Converged,
+        };
+        Some((Solution { layer, flow: flow.clone(), cl: f.cl }, point))
+    }
+}
+
+/// Abscissa and arc length of all nodes.
+fn stations(body: &Strip, wake: &Strip) -> (Vec<f64>, Vec<f64>) {
+    let (mut x, mut arc) = (Vec::new(), Vec::new());
+    for strip in [body, wake] {
+        let mut run = 0.0;
+        for (i, node) in strip.nodes.iter().enumerate() {
+            if i > 0 {
+                run += strip.elements[i - 1].length();
+            }
+            x.push(node[0]);
+            arc.push(run);
+        }
+    }
+    (x, arc)
+}
+
+/// The wake of another angle has other abscissae; its lengths are the same.
+fn place_wake(layer: &mut Layer, wake: &Strip) {
+    let body = layer.course.body;
+    for (x, node) in layer.x[body..].iter_mut().zip(&wake.nodes) {
+        *x = node[0];
+    }
+}
+
+/// Computes a whole polar. `watch` hears of every point with the counts of angles done and asked for, and may stop the sweep.
+///
+/// Points are in rising order of angle. Angles beyond three failures in a row are not in the result.
+///
+/// # Errors
+/// As [`Sweep::new`]; [`SolverError::Stopped`] when `watch` breaks off.
+///
+/// ```no_run
+/// use std::ops::ControlFlow;
+/// use spokeshave::section::{outline::clark_y, solver::{Settings, sweep}};
+/// let section = clark_y()?;
+/// let angles: Vec<f64> = (-8..30).map(|k| 0.5 * f64::from(k)).collect();
+/// let points = sweep(&section, &Settings::free(3e5, 9.0), &angles, |_, _, _| ControlFlow::Continue(()))?;
+/// # Ok::<(), Box<dyn std::error::Error>>(())
+/// ```
+pub fn sweep(
+    outline: &Outline,
+    settings: &Settings,
+    angles_deg: &[f64],
+    mut watch: impl FnMut(&Solved, usize, usize) -> ControlFlow<()>,
+) -> Result<Vec<Solved>, SolverError> {
+    let mut sweep = Sweep::new(outline, settings, angles_deg)?;
+    while let Some(point) = sweep.advance() {
+        let (done, total) = sweep.progress();
+        if watch(&point, done, total).is_break() {
+            return Err(SolverError::Stopped { done, total });
+        }
+    }
+    Ok(sweep.points())
+}
