@@ -5,7 +5,7 @@
 //! `dT/dr = 4π r ρ F |V + u| u`, `dQ/dr = 4π r² ρ F |V + u| v`. Eliminating W leaves one residual in φ without a singular
 //! denominator (the idea of S. A. Ning, Wind Energy 17(9), 2014, and of his 2021 form for the static case):
 //!
-//! `R(φ) = Ω r N − V M`, `M = 4 F |sin φ| cos φ + σ ct`, `N = 4 F sin φ |sin φ| − σ cn`, or in the windmill brake state
+//! `R(φ) = Ω r N − V M` (here over `hypot(V, Ω r)`), `M = 4 F |sin φ| cos φ + σ ct`, `N = 4 F sin φ |sin φ| − σ cn`, or in the windmill brake state
 //! (M. L. Buhl, NREL/TP-500-36834, 2005) `N = 4 F sin φ [(5/3 − F) sin φ + sqrt(−σ cn/2 − F (4/3 − F) sin² φ)]`.
 //!
 //! Where the residual has several roots, the one of least `|α|` counts: it is found by marching outward from
@@ -120,7 +120,8 @@ const NEAR_ZERO_RAD: f64 = 1e-7;
 const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
-const CONVERGED_RAD: f64 = 1e-12;
+/// Of the inflow angle (rad) and of the residual over `hypot(V, Ω r)`.
+const CONVERGED: f64 = 1e-12;
 const MOST_PASSES: usize = 100;
 
 struct Terms {
@@ -141,10 +142,12 @@ impl Element<'_> {
             return None;
         }
         let lookups = std::cell::Cell::new(1);
+        let speed = self.axial_m_s.hypot(self.turning_m_s);
+        let (turning, axial) = (self.turning_m_s / speed, self.axial_m_s / speed);
         let residual = |phi: f64| {
             lookups.set(lookups.get() + 1);
             let t = self.terms(phi);
-            self.turning_m_s * t.n - self.axial_m_s * t.m
+            turning * t.n - axial * t.m
         };
         let (brackets, count) = self.brackets();
         let phi = brackets[..count].iter().find_map(|&(lo, hi)| self.nearest_root(lo, hi, &residual))?;
@@ -227,8 +230,13 @@ impl Element<'_> {
                 return Some(there.0);
             }
             if here.1.is_sign_negative() != there.1.is_sign_negative() {
-                let mut rule = SimpleConvergency { eps: CONVERGED_RAD, max_iter: MOST_PASSES };
-                return find_root_brent(here.0, there.0, residual, &mut rule).ok();
+                let known = |phi: f64| match phi {
+                    p if p == here.0 => here.1,
+                    p if p == there.0 => there.1,
+                    p => residual(p),
+                };
+                let mut rule = SimpleConvergency { eps: CONVERGED, max_iter: MOST_PASSES };
+                return find_root_brent(here.0, there.0, known, &mut rule).ok();
             }
             here = there;
             next = stepped(here.0, end);

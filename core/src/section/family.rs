@@ -177,14 +177,19 @@ impl Family {
         let (t2, t3) = (t * t, t * t * t);
         let h01 = 3.0 * t2 - 2.0 * t3;
         let (h00, h10, h11) = (1.0 - h01, (t3 - 2.0 * t2 + t) * h, (t3 - t2) * h);
-        let (mut cl, mut cd) = (0.0, 0.0);
+        // The polars are mixed first, so that the cubic is worked out once.
+        let (mut p, mut q) = ([0.0; 4], [0.0; 4]);
         for &(polar, w) in &mix.part[..mix.count] {
             let at = polar * self.grid.len() + i;
-            if let [p, q] = &self.nodes[at..at + 2] {
-                cl += w * (h00 * p[0] + h10 * p[1] + h01 * q[0] + h11 * q[1]);
-                cd += w * (h00 * p[2] + h10 * p[3] + h01 * q[2] + h11 * q[3]);
+            if let [left, right] = &self.nodes[at..at + 2] {
+                for k in 0..4 {
+                    p[k] += w * left[k];
+                    q[k] += w * right[k];
+                }
             }
         }
+        let cl = h00 * p[0] + h10 * p[1] + h01 * q[0] + h11 * q[1];
+        let cd = h00 * p[2] + h10 * p[3] + h01 * q[2] + h11 * q[3];
         Coefficients { cl, cd }
     }
 
