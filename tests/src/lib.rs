@@ -1,3 +1,7 @@
 //! Outside checks of Spokeshave: published values, reference cases, other judges, real browsers.
 
+#![forbid(unsafe_code)]
+
+pub mod browser;
 pub mod reference;
+pub mod tools;

@@ -1,0 +1,78 @@
+//! Setting up what the checks need beside Rust: a browser with its driver, and the accessibility rules.
+
+use anyhow::{Context, Result};
+use spokeshave_press::{Workspace, run};
+use spokeshave_tests::tools::{AXE_VERSION, axe_script, chromedriver, chromium, on_path};
+use std::process::Command;
+
+/// Installs what is missing.
+///
+/// # Errors
+/// If something may not be installed from here; the message says what to install by hand.
+pub(crate) fn set_up(workspace: &Workspace) -> Result<()> {
+    println!("== what the checks need");
+    rust_components(workspace)?;
+    packages()?;
+    accessibility_rules(workspace)
+}
+
+/// The formatter and the linter, which a Rust installed without rustup may lack.
+fn rust_components(workspace: &Workspace) -> Result<()> {
+    for (program, component) in [("fmt", "rustfmt"), ("clippy", "clippy")] {
+        let answers = || {
+            let asked = workspace.cargo().args([program, "--version"]).output();
+            asked.is_ok_and(|asked| asked.status.success())
+        };
+        if !answers() {
+            let add = run(Command::new("rustup").args(["component", "add", component]));
+            add.with_context(|| format!("`cargo {program}` is missing: install {component}"))?;
+        }
+    }
+    Ok(())
+}
+
+/// Programs that come as Debian packages.
+fn packages() -> Result<()> {
+    let wanted = [
+        ("chromium", chromium().is_some()),
+        ("chromium-driver", chromedriver().is_some()),
+        ("npm", on_path(&["npm"]).is_some()),
+    ];
+    let missing: Vec<&str> = wanted.iter().filter(|(_, there)| !there).map(|(name, _)| *name).collect();
+    if missing.is_empty() {
+        return Ok(());
+    }
+    let line = format!("apt-get install --yes {}", missing.join(" "));
+    anyhow::ensure!(
+        may_install(),
+        "missing: {}. On Debian run `{line}` as root. Elsewhere install Chromium or Chrome, the \
+         chromedriver of the same version and npm, all on the PATH",
+        missing.join(", ")
+    );
+    println!("installing {}", missing.join(", "));
+    run(Command::new("apt-get").args(["--quiet", "--quiet", "update"]))?;
+    let mut install = Command::new("apt-get");
+    install.args(["--quiet", "--quiet", "install", "--yes", "--no-install-recommends"]).args(missing);
+    run(install.env("DEBIAN_FRONTEND", "noninteractive").stdin(std::process::Stdio::null()))
+}
+
+/// Whether this process may install Debian packages.
+fn may_install() -> bool {
+    let id = Command::new("id").arg("-u").output();
+    on_path(&["apt-get"]).is_some() && id.is_ok_and(|id| id.stdout.trim_ascii() == b"0")
+}
+
+/// The accessibility rules, into the target folder, without a trace in the sources.
+fn accessibility_rules(workspace: &Workspace) -> Result<()> {
+    let script = axe_script(&workspace.target);
+    if script.exists() {
+        return Ok(());
+    }
+    let folder = workspace.target.join("axe").join(AXE_VERSION);
+    std::fs::create_dir_all(&folder)?;
+    let mut npm = Command::new("npm");
+    npm.args(["install", "--silent", "--no-save", "--no-package-lock", "--ignore-scripts", "--prefix"]);
+    run(npm.arg(&folder).arg(format!("axe-core@{AXE_VERSION}")))?;
+    anyhow::ensure!(script.exists(), "npm did not bring {}", script.display());
+    Ok(())
+}

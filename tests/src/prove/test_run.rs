@@ -1,0 +1,57 @@
+//! Running the tests of every crate and counting them.
+
+use super::report::Tests;
+use anyhow::Result;
+use spokeshave_press::Workspace;
+use std::io::{BufRead, BufReader};
+use std::path::Path;
+use std::process::Stdio;
+
+/// Runs the tests of all crates, showing what they print; gives their count.
+pub(crate) fn all(workspace: &Workspace, page: Option<&Path>) -> Result<Option<Tests>> {
+    let mut cargo = workspace.cargo();
+    cargo.args(["test", "--release", "--workspace", "--no-fail-fast"]).stdout(Stdio::piped());
+    if let Some(page) = page {
+        cargo.env("SPOKESHAVE_PAGE", page);
+    }
+    let mut process = cargo.spawn()?;
+    let mut tests = None;
+    for line in process.stdout.take().map(BufReader::new).into_iter().flat_map(BufRead::lines) {
+        let line = line?;
+        println!("{line}");
+        if let Some(counted) = counted(&line) {
+            let sum: &mut Tests = tests.get_or_insert_default();
+            sum.passed += counted.passed;
+            sum.failed += counted.failed;
+            sum.ignored += counted.ignored;
+        }
+    }
+    let status = process.wait()?;
+    if !status.success() && tests.is_none_or(|tests| tests.failed == 0) {
+        anyhow::bail!("the tests did not run to their end ({status})");
+    }
+    Ok(tests)
+}
+
+/// Reads `test result: ok. 3 passed; 0 failed; 1 ignored; …`.
+fn counted(line: &str) -> Option<Tests> {
+    let counts = line.strip_prefix("test result: ")?.split_once(". ")?.1;
+    let count = |name: &str| {
+        let part = counts.split("; ").find_map(|part| part.strip_suffix(name))?;
+        part.trim().parse().ok()
+    };
+    Some(Tests { passed: count("passed")?, failed: count("failed")?, ignored: count("ignored")? })
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn a_closing_line_is_counted() {
+        let line =
+            "test result: FAILED. 3 passed; 2 failed; 1 ignored; 0 measured; 0 filtered out; finished in 1s";
+        assert_eq!(counted(line), Some(Tests { passed: 3, failed: 2, ignored: 1 }));
+        assert_eq!(counted("test a_test ... ok"), None);
+    }
+}

@@ -1,0 +1,35 @@
+//! Programs and packages that the checks need beside Rust.
+
+use std::path::{Path, PathBuf};
+
+/// The first of some programs that is on the path.
+#[must_use]
+pub fn on_path(names: &[&str]) -> Option<PathBuf> {
+    let path = std::env::var_os("PATH")?;
+    let folders: Vec<PathBuf> = std::env::split_paths(&path).collect();
+    names
+        .iter()
+        .flat_map(|name| folders.iter().map(move |folder| folder.join(name)))
+        .find(|file| file.is_file())
+}
+
+/// The browser the page is tested in.
+#[must_use]
+pub fn chromium() -> Option<PathBuf> {
+    on_path(&["chromium", "chromium-browser", "google-chrome"])
+}
+
+/// The program that drives the browser.
+#[must_use]
+pub fn chromedriver() -> Option<PathBuf> {
+    on_path(&["chromedriver"])
+}
+
+/// Version of the accessibility rules that the page is checked against.
+pub const AXE_VERSION: &str = "4.11.0";
+
+/// Where the accessibility rules are, once they are installed into `target`.
+#[must_use]
+pub fn axe_script(target: &Path) -> PathBuf {
+    target.join("axe").join(AXE_VERSION).join("node_modules/axe-core/axe.min.js")
+}
