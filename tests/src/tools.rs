@@ -25,6 +25,18 @@ pub fn chromedriver() -> Option<PathBuf> {
     on_path(&["chromedriver"])
 }
 
+/// A desktop that shows nothing, for what a browser does only in a window.
+#[must_use]
+pub fn xvfb() -> Option<PathBuf> {
+    on_path(&["Xvfb"])
+}
+
+/// The program that presses keys on a desktop.
+#[must_use]
+pub fn xdotool() -> Option<PathBuf> {
+    on_path(&["xdotool"])
+}
+
 /// Version of the accessibility rules that the page is checked against.
 pub const AXE_VERSION: &str = "4.11.0";
 

@@ -1,5 +1,6 @@
 //! The driver process.
 
+use super::Desktop;
 use crate::tools;
 use anyhow::{Context, Result};
 use std::process::Stdio;
@@ -14,11 +15,15 @@ pub(super) struct Driver {
 }
 
 impl Driver {
-    /// Starts the driver on a free port.
-    pub(super) async fn start() -> Result<Self> {
+    /// Starts the driver on a free port; the browsers it starts show their windows on the desktop.
+    pub(super) async fn start(desktop: Option<&Desktop>) -> Result<Self> {
         let program = tools::chromedriver()
             .context("chromedriver is missing: run `cargo prove`, or install the package chromium-driver")?;
-        let mut process = Command::new(program)
+        let mut command = Command::new(program);
+        if let Some(desktop) = desktop {
+            command.env("DISPLAY", desktop.display());
+        }
+        let mut process = command
             .arg("--port=0")
             .stdin(Stdio::null())
             .stdout(Stdio::piped())

@@ -8,16 +8,19 @@
 mod axe;
 mod cdp;
 mod control;
+mod desktop;
 mod download;
 mod driver;
 mod log;
 mod look;
 mod page;
 mod session;
+mod setup;
 
 pub use axe::Violation;
 pub use control::Control;
+pub use desktop::{Desktop, SaveAs};
 pub use log::{ConsoleLine, Logs};
 pub use look::{Look, NARROW, Size, WIDE};
 pub use page::{built_page, target_folder};
-pub use session::{Browser, drive};
+pub use session::{Browser, drive, drive_on};

@@ -1,34 +1,17 @@
 //! One browser with a fresh profile.
 
+use super::desktop::Desktop;
 use super::driver::Driver;
-use super::{built_page, cdp, target_folder};
-use crate::tools;
+use super::{built_page, cdp, setup, target_folder};
 use anyhow::{Context, Result};
 use fantoccini::{Client, ClientBuilder};
 use futures_util::FutureExt;
 use hyper_util::client::legacy::connect::HttpConnector;
-use serde_json::{Value, json};
+use serde_json::Value;
 use std::panic::AssertUnwindSafe;
 use std::path::Path;
 use std::time::{Duration, Instant};
 use tempfile::TempDir;
-
-/// Flags for a browser that shows no window, asks nothing and calls nobody. The sandbox needs rights
-/// that test machines often lack, and the only page opened is our own.
-const FLAGS: [&str; 12] = [
-    "--headless",
-    "--no-sandbox",
-    "--disable-gpu",
-    "--disable-quic",
-    "--disable-dev-shm-usage",
-    "--no-first-run",
-    "--no-default-browser-check",
-    "--disable-background-networking",
-    "--disable-component-update",
-    "--disable-sync",
-    "--enable-unsafe-swiftshader",
-    "--hide-scrollbars",
-];
 
 /// How long to wait for something to appear.
 const PATIENCE: Duration = Duration::from_secs(10);
@@ -46,7 +29,19 @@ pub struct Browser {
 /// # Errors
 /// What the check returns, or that no browser could be started.
 pub async fn drive(name: &str, check: impl AsyncFnOnce(&Browser) -> Result<()>) -> Result<()> {
-    let browser = Browser::start().await?;
+    drive_on(None, name, check).await
+}
+
+/// As [`drive`], in a window if there is a desktop for it.
+///
+/// # Errors
+/// What the check returns, or that no browser could be started.
+pub async fn drive_on(
+    desktop: Option<&Desktop>,
+    name: &str,
+    check: impl AsyncFnOnce(&Browser) -> Result<()>,
+) -> Result<()> {
+    let browser = Browser::start_on(desktop).await?;
     let outcome = AssertUnwindSafe(check(&browser)).catch_unwind().await;
     if !matches!(outcome, Ok(Ok(()))) {
         browser.leave_picture(name).await;
@@ -59,25 +54,24 @@ pub async fn drive(name: &str, check: impl AsyncFnOnce(&Browser) -> Result<()>) 
 }
 
 impl Browser {
-    /// Starts a browser with a fresh profile.
+    /// Starts a browser with a fresh profile and no window.
     ///
     /// # Errors
     /// If the browser or its driver is missing or does not start.
     pub async fn start() -> Result<Self> {
-        let program = tools::chromium()
-            .context("no Chromium found: run `cargo prove`, or install the package chromium")?;
+        Self::start_on(None).await
+    }
+
+    /// Starts a browser with a fresh profile, with a window if there is a desktop for it.
+    ///
+    /// # Errors
+    /// If the browser or its driver is missing or does not start.
+    pub async fn start_on(desktop: Option<&Desktop>) -> Result<Self> {
         let folder = TempDir::new()?;
-        let mut flags: Vec<String> = FLAGS.iter().map(ToString::to_string).collect();
-        flags.push(format!("--user-data-dir={}", folder.path().join("profile").display()));
-        let capabilities = json!({
-            "browserName": "chrome",
-            "goog:chromeOptions": {"args": flags, "binary": program},
-            "goog:loggingPrefs": {"performance": "ALL", "browser": "ALL"},
-        });
-        let Value::Object(capabilities) = capabilities else { unreachable!("written as an object above") };
-        let driver = Driver::start().await?;
-        let client =
-            ClientBuilder::new(HttpConnector::new()).capabilities(capabilities).connect(&driver.url).await?;
+        let capabilities = setup::capabilities(folder.path(), desktop)?;
+        let driver = Driver::start(desktop).await?;
+        let mut client = ClientBuilder::new(HttpConnector::new());
+        let client = client.capabilities(capabilities).connect(&driver.url).await?;
         Ok(Self { client, folder, driver })
     }
 
@@ -103,7 +97,7 @@ impl Browser {
     /// If the application does not start.
     pub async fn open_file(&self, file: &Path) -> Result<f64> {
         self.go_to_file(file).await?;
-        self.started().await
+        self.wait_until_started().await
     }
 
     /// Opens a file from disk, whatever it does.
@@ -123,10 +117,23 @@ impl Browser {
     /// If the application does not start.
     pub async fn reload(&self) -> Result<f64> {
         self.client.refresh().await?;
-        self.started().await
+        self.wait_until_started().await
     }
 
-    async fn started(&self) -> Result<f64> {
+    /// Reloads the page, whatever it does then.
+    ///
+    /// # Errors
+    /// If the browser refuses.
+    pub async fn reload_unstarted(&self) -> Result<()> {
+        Ok(self.client.refresh().await?)
+    }
+
+    /// Waits until the application has started; gives the time from the start of loading, in
+    /// milliseconds.
+    ///
+    /// # Errors
+    /// If it does not start.
+    pub async fn wait_until_started(&self) -> Result<f64> {
         let started = "return window.spokeshave && window.spokeshave.startedMs || null";
         self.wait("the application to start", async || Ok(self.run(started).await?.as_f64())).await
     }
@@ -137,6 +144,15 @@ impl Browser {
     /// If the script throws.
     pub async fn run(&self, script: &str) -> Result<Value> {
         self.client.execute(script, vec![]).await.with_context(|| format!("in the page: {script}"))
+    }
+
+    /// Runs JavaScript in every page opened from now on, before any script of the page.
+    ///
+    /// # Errors
+    /// If the browser refuses.
+    pub async fn before_any_script(&self, script: &str) -> Result<()> {
+        let source = serde_json::json!({"source": script});
+        self.command("Page.addScriptToEvaluateOnNewDocument", source).await.map(drop)
     }
 
     /// Asks again and again until there is an answer.

@@ -2,7 +2,7 @@
 
 use anyhow::{Context, Result};
 use spokeshave_press::{Workspace, run};
-use spokeshave_tests::tools::{AXE_VERSION, axe_script, chromedriver, chromium, on_path};
+use spokeshave_tests::tools::{AXE_VERSION, axe_script, chromedriver, chromium, on_path, xdotool, xvfb};
 use std::process::Command;
 
 /// Installs what is missing.
@@ -36,6 +36,8 @@ fn packages() -> Result<()> {
     let wanted = [
         ("chromium", chromium().is_some()),
         ("chromium-driver", chromedriver().is_some()),
+        ("xvfb", xvfb().is_some()),
+        ("xdotool", xdotool().is_some()),
         ("npm", on_path(&["npm"]).is_some()),
     ];
     let missing: Vec<&str> = wanted.iter().filter(|(_, there)| !there).map(|(name, _)| *name).collect();
@@ -46,7 +48,7 @@ fn packages() -> Result<()> {
     anyhow::ensure!(
         may_install(),
         "missing: {}. On Debian run `{line}` as root. Elsewhere install Chromium or Chrome, the \
-         chromedriver of the same version and npm, all on the PATH",
+         chromedriver of the same version, Xvfb, xdotool and npm, all on the PATH",
         missing.join(", ")
     );
     println!("installing {}", missing.join(", "));

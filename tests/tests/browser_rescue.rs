@@ -1,0 +1,84 @@
+//! A fault in the program never loses the job, and a job that stops the page does not stop it for ever.
+
+use anyhow::Result;
+use spokeshave_tests::browser::{Browser, drive};
+
+const JOB: &str = r#"{"title":"kept </script> & safe"}"#;
+
+/// What the application does before it works a job out.
+async fn begin_work(browser: &Browser) -> Result<()> {
+    browser.run(&format!("spokeshave.keep.before({})", serde_json::to_string(JOB)?)).await.map(drop)
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn a_fault_shows_a_message_that_offers_the_job() -> Result<()> {
+    drive("fault", async |browser| {
+        browser.open_page().await?;
+        begin_work(browser).await?;
+        browser.run("setTimeout(() => { throw new Error('a fault on purpose') })").await?;
+        browser.wait_for_text("The page has stopped").await?;
+        assert!(browser.violations().await?.is_empty(), "{:?}", browser.violations().await?);
+        let file = browser.download(async || browser.press("Save the job as a file").await).await?;
+        assert_eq!(std::fs::read_to_string(file)?, JOB);
+        Ok(())
+    })
+    .await
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn a_panic_shows_the_same_message() -> Result<()> {
+    drive("panic", async |browser| {
+        browser.open_page().await?;
+        begin_work(browser).await?;
+        // Every element that the application wants to draw is refused, for which it has no answer.
+        browser.run("Node.prototype.cloneNode = () => { throw new Error('refused') }").await?;
+        browser.run("setTimeout(() => wasm_bindgen.start())").await?;
+        browser.wait_for_text("The page has stopped").await?;
+        let said = browser.run("return document.querySelector('#boot-overlay pre').textContent").await?;
+        assert!(said.as_str().is_some_and(|said| said.starts_with("panicked at")), "{said}");
+        browser.control("button", "Start again with this job").await.map(drop)
+    })
+    .await
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn a_job_that_never_finished_is_not_tried_again_unasked() -> Result<()> {
+    drive("held-back", async |browser| {
+        browser.open_page().await?;
+        begin_work(browser).await?;
+        // A browser that was killed in the middle of the work writes nothing more.
+        browser.run("spokeshave.keep.after = () => {}").await?;
+        browser.reload_unstarted().await?;
+        browser.wait_for_text("This job stopped the page last time").await?;
+        let file = browser.download(async || browser.press("Save the job as a file").await).await?;
+        assert_eq!(std::fs::read_to_string(file)?, JOB);
+
+        browser.press("Start with an example").await?;
+        browser.wait_until_started().await?;
+        assert!(!browser.text().await?.contains("stopped"));
+        browser.reload().await.map(drop)
+    })
+    .await
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn leaving_in_the_middle_of_the_work_is_no_fault() -> Result<()> {
+    drive("leave", async |browser| {
+        browser.open_page().await?;
+        begin_work(browser).await?;
+        browser.reload().await?;
+        assert_eq!(browser.run("return spokeshave.keep.atStart()").await?, JOB);
+        Ok(())
+    })
+    .await
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn a_browser_that_lacks_something_is_told_so() -> Result<()> {
+    drive("lacking", async |browser| {
+        browser.before_any_script("delete window.DecompressionStream").await?;
+        browser.go_to_file(&spokeshave_tests::browser::built_page()?).await?;
+        browser.wait_for_text("it lacks DecompressionStream").await
+    })
+    .await
+}
