@@ -6,9 +6,11 @@
 //! results say otherwise (`_deg`).
 
 pub mod air;
+pub mod aircraft;
 pub mod blade;
 pub mod curve;
 pub mod drawn;
+pub mod engine;
 pub mod fit;
 pub mod job;
 pub mod report;

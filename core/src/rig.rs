@@ -4,6 +4,7 @@ use std::f64::consts::PI;
 
 use crate::air::{Air, AirError};
 use crate::blade::{Blade, BladeError};
+use crate::engine::Shaft;
 use crate::job::{FlightPoint, Job, PitchControl};
 use crate::result::{Analysis, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
@@ -16,6 +17,8 @@ pub struct Rig {
     pub job: Job,
     /// Its propeller.
     pub rotor: Rotor,
+    /// Its engine, where it has one.
+    pub shaft: Option<Shaft>,
 }
 
 impl Rig {
@@ -31,7 +34,8 @@ impl Rig {
     /// assert_eq!(analysis.flight_points.len(), job.flight_points.len());
     /// ```
     pub fn new(job: &Job) -> Result<Self, BladeError> {
-        Ok(Self { rotor: Rotor::new(Blade::new(job)?, &job.method), job: job.clone() })
+        let shaft = job.engine.as_ref().and_then(Shaft::new);
+        Ok(Self { rotor: Rotor::new(Blade::new(job)?, &job.method), shaft, job: job.clone() })
     }
 
     /// Every flight point worked out.
