@@ -1,6 +1,8 @@
 //! The Spokeshave page: a Yew app that runs entirely in the browser.
 
 mod app;
+pub mod blade_view;
+pub mod chart;
 pub mod keep;
 pub mod saved_page;
 

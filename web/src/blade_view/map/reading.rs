@@ -1,0 +1,121 @@
+//! What the map says under the pointer.
+
+use super::frame::Frame;
+use crate::chart::axis::px;
+use crate::chart::number::{fixed, signed};
+use crate::chart::unit::Unit;
+use spokeshave::rotor::{DepartureMap, MapCell};
+use std::rc::Rc;
+use web_sys::Element;
+use yew::prelude::*;
+
+/// Properties of [`Reading`].
+#[derive(Properties, PartialEq)]
+pub(super) struct ReadingProps {
+    pub(super) map: Rc<DepartureMap>,
+    pub(super) frame: Rc<Frame>,
+    pub(super) length: Unit,
+    pub(super) speed: Unit,
+    /// Told the radius, m, that is clicked.
+    pub(super) on_radius: Callback<f64>,
+}
+
+/// A pane over the map: shows the figures under the pointer, and a click chooses a radius. Only the pane itself
+/// is drawn again when the pointer moves.
+#[component]
+pub(super) fn Reading(props: &ReadingProps) -> Html {
+    let pointer = use_state_eq(|| None::<[f64; 2]>);
+    let frame = props.frame.clone();
+    let onmousemove = {
+        let (pointer, frame) = (pointer.clone(), frame.clone());
+        Callback::from(move |event: MouseEvent| pointer.set(place(&event, &frame)))
+    };
+    let onmouseleave = {
+        let pointer = pointer.clone();
+        Callback::from(move |_: MouseEvent| pointer.set(None))
+    };
+    let onclick = {
+        let (tell, frame) = (props.on_radius.clone(), frame.clone());
+        Callback::from(move |event: MouseEvent| {
+            if let Some([_, y]) = place(&event, &frame) {
+                tell.emit(frame.axis.scale().value(y));
+            }
+        })
+    };
+    html! {
+        <g class="reading" aria-hidden="true">
+            { pointer.map(|at| shown(props, at)) }
+            <rect class="reach" x={px(frame.left)} y={px(frame.axis.top_px)} width={px(frame.width())}
+                height={px(frame.height())} {onmousemove} {onmouseleave} {onclick} />
+        </g>
+    }
+}
+
+/// The pointer in the drawing's pixels, whatever its size on the screen.
+fn place(event: &MouseEvent, frame: &Frame) -> Option<[f64; 2]> {
+    let pane = event.target_dyn_into::<Element>()?.get_bounding_client_rect();
+    if pane.width() <= 0.0 || pane.height() <= 0.0 {
+        return None;
+    }
+    let share = |at: i32, from: f64, size: f64| ((f64::from(at) - from) / size).clamp(0.0, 1.0);
+    let x = frame.left + frame.width() * share(event.client_x(), pane.left(), pane.width());
+    let y = frame.axis.top_px + frame.height() * share(event.client_y(), pane.top(), pane.height());
+    Some([x, y])
+}
+
+fn shown(props: &ReadingProps, [x, y]: [f64; 2]) -> Html {
+    let frame = &props.frame;
+    let [first, second] = words(props, [x, y]);
+    let right = x > 0.5 * (frame.left + frame.right);
+    let (tx, anchor) = if right { (x - 10.0, "end") } else { (x + 10.0, "start") };
+    let ty = if y < frame.axis.top_px + 44.0 { y + 20.0 } else { y - 26.0 };
+    let (top, low) = (px(frame.axis.top_px), px(frame.axis.hub_px));
+    html! {
+        <>
+            <line class="cross" x1={px(x)} x2={px(x)} y1={top} y2={low} />
+            <line class="cross" x1={px(frame.left)} x2={px(frame.right)} y1={px(y)} y2={px(y)} />
+            <text class="haloed" x={px(tx)} y={px(ty)} text-anchor={anchor}>{ first }</text>
+            <text class="haloed strong" x={px(tx)} y={px(ty + 16.0)} text-anchor={anchor}>{ second }</text>
+        </>
+    }
+}
+
+fn words(props: &ReadingProps, [x, y]: [f64; 2]) -> [String; 2] {
+    let frame = &props.frame;
+    let (speed, radius) = (frame.speed().value(x), frame.axis.scale().value(y));
+    let advance =
+        frame.advance_at(x).map_or_else(String::new, |a| format!(", {} per turn", props.length.text(a)));
+    let place = format!("{} at {}{advance}", props.length.text(radius), props.speed.text(speed));
+    [place, cell(&props.map, radius, speed).map_or_else(|| "no figure".to_owned(), figures)]
+}
+
+/// The cell nearest to a radius (m) and airspeed (m/s).
+fn cell(map: &DepartureMap, radius_m: f64, airspeed_m_s: f64) -> Option<&MapCell> {
+    let nearest = |values: &[f64], at: f64| {
+        let away = |i: &usize| (values[*i] - at).abs();
+        (0..values.len()).min_by(|a, b| away(a).total_cmp(&away(b)))
+    };
+    map.cells.get([nearest(&map.radii_m, radius_m)?, nearest(&map.airspeeds_m_s, airspeed_m_s)?])
+}
+
+fn figures(cell: &MapCell) -> String {
+    let Some(departure) = cell.departure_deg else { return "no figure".to_owned() };
+    let stalled = if cell.past_stall_deg.is_some_and(|p| p > 0.0) { ", stalled" } else { "" };
+    let share =
+        cell.share_of_best.map_or_else(String::new, |s| format!(", {} % of best", fixed(100.0 * s, 0)));
+    format!("{}°{stalled}{share}", signed(departure, 1))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::super::frame::tests::sample;
+    use super::*;
+
+    #[test]
+    fn the_nearest_cell_speaks() {
+        let map = sample();
+        let cell = cell(&map, 0.126, 9.0).unwrap();
+        assert_eq!(figures(cell), "+9.2°, 15 % of best");
+        assert_eq!(figures(&MapCell::default()), "no figure");
+    }
+}
