@@ -35,11 +35,19 @@ fn room(space: &Clear, at: [f64; 2], half: [f64; 2]) -> f64 {
 }
 
 /// One figure for each line that has room for it, as near the middle height as the others allow.
-pub(super) fn label_levels(lines: &[(f64, &[Ring])], frame: &Frame, space: &mut Clear) -> Vec<Label> {
+pub(super) fn label_levels(
+    lines: &[(f64, &[Ring])],
+    frame: &Frame,
+    levels: &[f64],
+    space: &mut Clear,
+) -> Vec<Label> {
     let middle = 0.5 * (frame.axis.top_px + frame.axis.hub_px);
+    let between = |y: f64| levels.iter().map(|l| (y - l).abs()).fold(FIGURE[1], f64::min) / FIGURE[1];
     let mut labels = Vec::new();
     for (level, rings) in lines {
-        let score = |at: &[f64; 2]| room(space, *at, FIGURE) - 0.8 * (at[1] - middle).abs() / frame.height();
+        let score = |at: &[f64; 2]| {
+            room(space, *at, FIGURE) + 0.3 * between(at[1]) - 0.8 * (at[1] - middle).abs() / frame.height()
+        };
         let open = rings.iter().flatten().filter(|at| room(space, **at, FIGURE) > 0.05);
         let Some(&at) = open.max_by(|a, b| score(a).total_cmp(&score(b))) else { continue };
         space.take(at, FIGURE);
@@ -137,6 +145,6 @@ mod tests {
         let frame = frame();
         let mut space = open_space(&frame, &[]);
         let at_edge: Vec<Ring> = vec![vec![[11.0, 70.0], [11.0, 300.0]]];
-        assert!(label_levels(&[(2.0, &at_edge)], &frame, &mut space).is_empty());
+        assert!(label_levels(&[(2.0, &at_edge)], &frame, &[], &mut space).is_empty());
     }
 }

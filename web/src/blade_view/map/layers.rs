@@ -10,7 +10,7 @@ use spokeshave::rotor::{DepartureMap, MapCell};
 /// The share of the best lift-to-drag that the working band keeps.
 const WORKING_SHARE: f64 = 0.95;
 /// Half the width of the words "working band", pixels.
-const BAND_HALF: f64 = 40.0;
+const BAND_HALF: f64 = 46.0;
 /// Lines drawn on the map, degrees; 0 is the best.
 const LINES_DEG: [f64; 7] = [0.0, 2.0, -2.0, 4.0, -4.0, 6.0, -6.0];
 
@@ -47,8 +47,9 @@ pub(super) struct Fill {
 }
 
 impl Layers {
-    /// The layers of a map; `marks` are the pixels of the flight points, which labels keep clear of.
-    pub(super) fn new(map: &DepartureMap, frame: &Frame, marks: &[f64]) -> Option<Self> {
+    /// The layers of a map. Labels keep clear of the flight points, at the pixels `marks` along, and stand between the
+    /// lines of the stations, at the pixels `levels` down, where they can.
+    pub(super) fn new(map: &DepartureMap, frame: &Frame, marks: &[f64], levels: &[f64]) -> Option<Self> {
         let departure = Field::new(map, frame, |c| c.departure_deg)?;
         let rings: Vec<Vec<Ring>> = BREAKS_DEG.iter().map(|b| departure.rings(*b)).collect();
         let best = departure.rings(0.0);
@@ -66,7 +67,7 @@ impl Layers {
             let at = BREAKS_DEG.iter().position(|b| *b == level);
             (level, at.map_or(best.as_slice(), |i| rings[i].as_slice()))
         };
-        let labels = label_levels(LINES_DEG.map(line).as_slice(), frame, &mut space);
+        let labels = label_levels(LINES_DEG.map(line).as_slice(), frame, levels, &mut space);
         Some(Self {
             fills: BREAKS_DEG.iter().enumerate().map(|(i, b)| fill(i, *b, &rings[i])).collect(),
             best: data(&best),
@@ -111,7 +112,7 @@ mod tests {
 
     #[test]
     fn a_map_is_painted_whole_and_in_finite_figures() {
-        let layers = Layers::new(&sample(), &frame(), &[100.0]).unwrap();
+        let layers = Layers::new(&sample(), &frame(), &[100.0], &[]).unwrap();
         assert_eq!(layers.fills.len(), 10);
         let all =
             layers.fills.iter().map(|f| f.data.as_str()).collect::<String>() + &layers.best + &layers.band;
@@ -123,7 +124,7 @@ mod tests {
 
     #[test]
     fn fills_rise_through_the_scale() {
-        let layers = Layers::new(&sample(), &frame(), &[]).unwrap();
+        let layers = Layers::new(&sample(), &frame(), &[], &[]).unwrap();
         let classes: Vec<&str> = layers.fills.iter().map(|f| f.class).collect();
         assert_eq!((classes[0], classes[9]), ("departure-1", "departure-10"));
     }
@@ -132,6 +133,6 @@ mod tests {
     fn a_map_without_figures_has_no_layers() {
         let mut map = sample();
         map.cells.fill(MapCell::default());
-        assert!(Layers::new(&map, &frame(), &[]).is_none());
+        assert!(Layers::new(&map, &frame(), &[], &[]).is_none());
     }
 }

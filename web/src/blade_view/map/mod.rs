@@ -76,10 +76,12 @@ pub fn DepartureChart(props: &DepartureChartProps) -> Html {
         use_memo((props.map.clone(), props.axis, width.to_bits(), from.to_bits()), |(map, axis, ..)| {
             Frame::new(map, *axis, from, width - 12.0)
         });
-    let places: Vec<u64> = marks::places(&frame, &props.marks).into_iter().map(f64::to_bits).collect();
-    let layers = use_memo((props.map.clone(), frame.clone(), places), |(map, frame, places)| {
-        Layers::new(map, frame, &places.iter().map(|p| f64::from_bits(*p)).collect::<Vec<_>>())
-    });
+    let places = marks::places(&frame, &props.marks);
+    let levels = props.stations.iter().map(|s| props.axis.y(s.0)).collect::<Vec<f64>>();
+    let layers =
+        use_memo((props.map.clone(), frame.clone(), places, levels), |(map, frame, places, levels)| {
+            Layers::new(map, frame, places, levels)
+        });
     let table = {
         let (map, length, speed) = (props.map.clone(), props.length, props.speed);
         Callback::from(move |()| table::table(&map, &length, &speed))
@@ -153,7 +155,7 @@ fn advance_axis(frame: &Frame, props: &DepartureChartProps, most: usize) -> Html
     let y = frame.axis.hub_px + 26.0;
     let ticks = placed(&Linear::new((0.0, greatest), (0.0, 1.0)), &props.length, most);
     let at = |(_, tick): (f64, crate::chart::ticks::Tick)| {
-        Some((frame.x_of_advance(props.length.si(tick.at))?, tick)).filter(|(x, _)| *x < frame.right - 66.0)
+        Some((frame.x_of_advance(props.length.si(tick.at))?, tick)).filter(|(x, _)| *x < frame.right - 84.0)
     };
     let ticks: Vec<_> = ticks.into_iter().filter_map(at).collect();
     let name = format!("{} per turn", props.length.name);

@@ -63,7 +63,7 @@ fn marks(s: &StationResult) -> Vec<Point> {
         class: None,
         strong: false,
     });
-    best.into_iter().chain(now).collect()
+    now.into_iter().chain(best).collect()
 }
 
 fn spans(s: &StationResult, end: f64) -> Vec<Span> {

@@ -3,6 +3,7 @@
 mod facts;
 mod ledger;
 mod lift_drag;
+mod rays;
 mod section;
 mod sentence;
 mod triangle;

@@ -15,6 +15,8 @@ const MARGIN: (f64, f64) = (16.0, 24.0);
 /// Length of the arrow of the air and of the chord line beyond the section, in chords.
 const ARROW: f64 = 0.5;
 const BEYOND: f64 = 1.22;
+/// Under this blade angle, rad, its figure stands outside the arc for want of room inside.
+const FLAT: f64 = 0.3;
 
 /// Properties of [`Section`].
 #[derive(Properties, PartialEq)]
@@ -44,7 +46,8 @@ impl Stand {
             (of.clone().fold(f64::MAX, f64::min), of.fold(f64::MIN, f64::max))
         };
         let ((left, right), (top, low)) = (span(0), span(1));
-        let room = [width - 12.0, HEIGHT - MARGIN.0 - MARGIN.1];
+        let figure = if angle.abs() < FLAT { 40.0 } else { 0.0 };
+        let room = [width - 12.0 - figure, HEIGHT - MARGIN.0 - MARGIN.1];
         let chord_px = (room[0] / (right - left)).min(room[1] / (low - top)).min(150.0);
         let spare = 0.5 * (room[1] - (low - top) * chord_px);
         Self { nose: [6.0 - left * chord_px, MARGIN.0 + spare - top * chord_px], chord_px, angle }
@@ -144,11 +147,13 @@ fn angle_mark(stand: &Stand, blade_angle_deg: f64) -> Html {
     let mut path = Path::default();
     path.move_to(from);
     path.arc_to(stand.chord_px * reach, stand.angle >= 0.0, to);
-    let at = stand.towards(0.5 * stand.angle, reach + 0.04);
+    let flat = stand.angle.abs() < FLAT;
+    let at = stand.towards(0.42 * stand.angle, if flat { reach + 0.06 } else { reach - 0.05 });
+    let anchor = if flat { "start" } else { "end" };
     html! {
         <>
             <path class="angle-arc" d={path.into_string()} />
-            <text class="haloed" x={px(at[0])} y={px(at[1] + 4.0)} text-anchor="end">{ format!("{}°", fixed(blade_angle_deg, 1)) }</text>
+            <text class="haloed" x={px(at[0])} y={px(at[1] + 4.0)} text-anchor={anchor}>{ format!("{}°", fixed(blade_angle_deg, 1)) }</text>
         </>
     }
 }

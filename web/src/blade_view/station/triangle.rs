@@ -1,7 +1,7 @@
 //! The velocity triangle: how the air meets the station, where the chord lies and where it would be best.
 
+use super::rays::Rays;
 use crate::chart::axis::px;
-use crate::chart::departure;
 use crate::chart::path::polygon;
 use crate::chart::spread::spread;
 use crate::chart::unit::Unit;
@@ -10,7 +10,7 @@ use std::f64::consts::TAU;
 use yew::prelude::*;
 
 /// Height of the drawing, and of the part for the arrows.
-const HEIGHT: f64 = 132.0;
+pub(super) const HEIGHT: f64 = 132.0;
 const DEEPEST: f64 = 92.0;
 /// Where the arrows start.
 const START: [f64; 2] = [10.0, 24.0];
@@ -86,6 +86,7 @@ fn arrows(air: &Air, props: &TriangleProps) -> Html {
     let y = if up { HEIGHT - 30.0 } else { y };
     let corner = [x + air.turning * scale, y];
     let end = [corner[0], y + air.forward * scale];
+    let turning = turning_words(air, &props.speed);
     let length = air.speed() * scale;
     let rays = Rays::new(&props.station, [x, y], length, up);
     html! {
@@ -95,8 +96,9 @@ fn arrows(air: &Air, props: &TriangleProps) -> Html {
             { arrow(corner, end, "arrow") }
             { rays.as_ref().map(Rays::lines) }
             { arrow([x, y], end, "arrow is-heavy") }
-            <text x={px(0.5 * (x + corner[0]).max(150.0))} y={px(if up { y + 18.0 } else { y - 9.0 })} text-anchor="middle">
-                { turning_words(air, &props.speed) }
+            <text x={px((0.5 * (x + corner[0])).max(x + 3.1 * turning.chars().count() as f64))}
+                y={px(if up { y + 18.0 } else { y - 9.0 })} text-anchor="middle">
+                { turning }
             </text>
             { side_words(air, props, corner, end, rays.as_ref()) }
             <text x={px(x)} y={px(if up { 14.0 } else { HEIGHT - 6.0 })}>
@@ -157,51 +159,6 @@ fn side_words(
     words.into_iter().zip(heights).map(one).collect()
 }
 
-/// The chord as it lies and as it would lie at its best, from the start of the triangle.
-struct Rays {
-    from: [f64; 2],
-    chord: [f64; 2],
-    best: Option<[f64; 2]>,
-    class: &'static str,
-}
-
-impl Rays {
-    fn new(station: &StationResult, from: [f64; 2], length: f64, up: bool) -> Option<Self> {
-        let air = station.inflow_angle_deg?;
-        let angles = [station.blade_angle_deg, air + station.best_angle_deg.unwrap_or(0.0)];
-        let room = if up { from[1] - 18.0 } else { HEIGHT - 24.0 - from[1] };
-        let deepest = angles.map(|a| a.to_radians().sin().abs()).into_iter().fold(1e-9, f64::max);
-        let length = length.min(room / deepest);
-        let end = |deg: f64| {
-            let (sin, cos) = deg.to_radians().sin_cos();
-            [from[0] + length * cos, from[1] + length * sin]
-        };
-        Some(Self {
-            from,
-            chord: end(angles[0]),
-            best: station.best_angle_deg.map(|_| end(angles[1])),
-            class: departure::style(station.departure_deg),
-        })
-    }
-
-    fn right(&self) -> f64 {
-        self.chord[0].max(self.best.map_or(0.0, |b| b[0]))
-    }
-
-    /// Between the two: the departure.
-    fn wedge(&self) -> Html {
-        let Some(best) = self.best else { return Html::default() };
-        html! { <path class={classes!("band", self.class)} d={polygon([self.from, self.chord, best])} /> }
-    }
-
-    fn lines(&self) -> Html {
-        let line = |to: [f64; 2], class: &'static str| {
-            html! { <line {class} x1={px(self.from[0])} y1={px(self.from[1])} x2={px(to[0])} y2={px(to[1])} /> }
-        };
-        html! { <>{ self.best.map(|b| line(b, "best-ray")) }{ line(self.chord, "chord-ray") }</> }
-    }
-}
-
 /// A line with a head at its end; a very short one is drawn without.
 pub(super) fn arrow(from: [f64; 2], to: [f64; 2], class: &'static str) -> Html {
     let (dx, dy) = (to[0] - from[0], to[1] - from[1]);
@@ -232,21 +189,5 @@ mod tests {
         assert!((air.forward - 51.0).abs() < 1e-9);
         assert_eq!(Air::new(&station, None, Some(2736.0)), None);
         assert_eq!(Air::new(&StationResult::default(), Some(1.0), Some(1.0)), None);
-    }
-
-    #[test]
-    fn rays_stay_on_the_drawing() {
-        for (angle, air, up) in [(51.0, 4.0, false), (-80.0, -85.0, true), (88.0, 70.0, false)] {
-            let station = StationResult {
-                blade_angle_deg: angle,
-                inflow_angle_deg: Some(air),
-                best_angle_deg: Some(3.0),
-                ..Default::default()
-            };
-            let rays = Rays::new(&station, [10.0, if up { HEIGHT - 30.0 } else { 24.0 }], 400.0, up).unwrap();
-            for end in [rays.chord, rays.best.unwrap()] {
-                assert!((0.0..=HEIGHT).contains(&end[1]), "{angle}: {end:?}");
-            }
-        }
     }
 }

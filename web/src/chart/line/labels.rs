@@ -1,7 +1,7 @@
 //! Names on the curves and words at the points, each where it hides least.
 
 use super::layout::Layout;
-use super::{LineChartProps, Point, Series};
+use super::{LineChartProps, Point, Series, heading};
 use crate::chart::axis::px;
 use crate::chart::clear::Clear;
 use yew::prelude::*;
@@ -19,11 +19,15 @@ fn half_size(words: &str) -> [f64; 2] {
 
 /// What the curves and spans leave clear.
 fn open_space(layout: &Layout, props: &LineChartProps) -> Clear {
-    let mut clear = Clear::new([layout.left, layout.right, layout.top, layout.low]);
+    // Without words of the axis there, labels may stand over the frame.
+    let top = if heading(&props.y).is_empty() { -6.0 } else { layout.top };
+    let mut clear = Clear::new([layout.left, layout.right, top, layout.low]);
     for series in &props.series {
         clear.keep_off_points(dense(layout, series));
     }
     clear.keep_off_points(props.points.iter().map(|p| layout.place(p.at)));
+    let rings = props.handles.iter().map(|h| layout.place(h.at));
+    clear.keep_off_points(rings.flat_map(|[x, y]| [[x, y - 5.0], [x, y + 5.0]]));
     clear.keep_off_uprights(props.uprights.iter().filter(|u| u.chosen).map(|u| layout.x.px(u.x)));
     clear
 }
@@ -67,26 +71,27 @@ fn shown<'a>(layout: &'a Layout, props: &'a LineChartProps) -> impl Iterator<Ite
     props.points.iter().filter(|p| layout.x.holds(p.at[0]) && layout.y.holds(p.at[1]))
 }
 
-/// Beside, above or under its point, where it touches least; takes what it uses.
+/// Above, beside or under its point, where it touches least and in that order of liking; takes what it uses.
 fn point_places(layout: &Layout, props: &LineChartProps, clear: &mut Clear) -> Vec<[f64; 2]> {
+    // A label's own point is nearer than this, so that it does not count.
+    const NEAR: f64 = 6.0;
     shown(layout, props)
         .map(|point| {
             let ([x, y], half) = (layout.place(point.at), half_size(&point.words));
-            let (side, lift) = (half[0] + 9.0, half[1] + 9.0);
+            let (side, lift) = (half[0] + 9.0, half[1] + 6.0);
             let around = [
-                [x + side, y],
-                [x - side, y],
-                [x, y - lift],
-                [x, y + lift],
-                [x - side, y - lift],
-                [x + side, y - lift],
-                [x - side, y + lift],
-                [x + side, y + lift],
+                ([x, y - lift], 0.0),
+                ([x - side, y], 0.5),
+                ([x + side, y], 1.0),
+                ([x - side, y - lift], 1.5),
+                ([x + side, y - lift], 2.0),
+                ([x, y + lift], 2.5),
+                ([x + side, y + lift], 3.0),
+                ([x - side, y + lift], 3.5),
             ];
-            let best = around
-                .into_iter()
-                .max_by(|a, b| clear.room(*a, half, ENOUGH).total_cmp(&clear.room(*b, half, ENOUGH)));
-            let best = best.unwrap_or([x, y - lift]);
+            let places = around.map(|(at, cost)| (at, clear.room(at, half, NEAR) - cost));
+            let best =
+                places.into_iter().max_by(|a, b| a.1.total_cmp(&b.1)).map_or([x, y - lift], |best| best.0);
             clear.take(best, half);
             best
         })
@@ -110,7 +115,7 @@ fn span_name(layout: &Layout, span: &super::Span, clear: &mut Clear) -> Option<H
         return None;
     }
     let x = from + half[0] + 4.0;
-    let heights = [layout.top + 11.0, layout.low - 11.0];
+    let heights = [layout.low - 11.0, layout.top + 11.0];
     let room = |y: &f64| clear.room([x, *y], half, ENOUGH);
     let y = heights.into_iter().max_by(|a, b| room(a).total_cmp(&room(b)))?;
     clear.take([x, y], half);

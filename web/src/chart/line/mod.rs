@@ -1,14 +1,18 @@
 //! A line chart: curves with their names on them, points, limits, spans and upright flight points.
 
+mod handles;
+mod inside;
 mod labels;
 mod layout;
 mod table;
 
-use super::axis::{bottom, left, most_on, placed, px, rows};
+use super::axis::{bottom, left, most_on, placed, px};
 use super::figure::Figure;
-use super::path::polyline;
 use super::unit::Unit;
 use super::width::use_width;
+pub use handles::{Grip, Handle};
+
+use handles::{Handles, HandlesProps};
 use layout::Layout;
 use yew::prelude::*;
 
@@ -124,6 +128,15 @@ pub struct LineChartProps {
     /// Spans.
     #[prop_or_default]
     pub spans: Vec<Span>,
+    /// Rings to drag.
+    #[prop_or_default]
+    pub handles: Vec<Handle>,
+    /// By how much a ring moves, SI.
+    #[prop_or_default]
+    pub step: f64,
+    /// Told what is done to the rings.
+    #[prop_or_default]
+    pub on_grip: Callback<Grip>,
     /// Height, pixels.
     #[prop_or(220.0)]
     pub height: f64,
@@ -133,7 +146,22 @@ pub struct LineChartProps {
 #[component]
 pub fn LineChart(props: &LineChartProps) -> Html {
     let (node, width) = use_width(340.0);
-    let layout = Layout::new(props, width);
+    // While a ring is dragged the chart keeps its scale, so that the ring stays under the pointer.
+    let held = use_state_eq(|| None::<(f64, f64)>);
+    let layout = Layout::new(props, width, *held);
+    let on_grip = {
+        let (held, span, tell) = (held.setter(), layout.y.span(), props.on_grip.clone());
+        Callback::from(move |grip: Grip| {
+            match grip {
+                Grip::Grab(_) => held.set(Some(span)),
+                Grip::Drop(_) | Grip::Cancel(_) => held.set(None),
+                Grip::Move(..) | Grip::Nudge(..) => {}
+            }
+            tell.emit(grip);
+        })
+    };
+    let handles = HandlesProps::new(&layout, props.handles.clone(), props.step, on_grip);
+    let role = if props.handles.is_empty() { "img" } else { "group" };
     let table = {
         let (title, x, y, series) =
             (props.title.clone(), props.x.clone(), props.y.clone(), props.series.clone());
@@ -143,11 +171,12 @@ pub fn LineChart(props: &LineChartProps) -> Html {
         <Figure title={props.title.clone()} {table} class="line-figure">
             <div class="line-chart" ref={node}>
                 <svg width={px(width)} height={px(props.height)} viewBox={format!("0 0 {} {}", px(width), px(props.height))}
-                    role="img" aria-label={description(props)}>
-                    { inside(&layout, props) }
+                    {role} aria-label={description(props)}>
+                    { inside::inside(&layout, props) }
                     { axes(&layout, props) }
                     { labels::points(&layout, props) }
                     { labels::names(&layout, props) }
+                    <Handles ..handles />
                 </svg>
             </div>
         </Figure>
@@ -158,59 +187,6 @@ fn description(props: &LineChartProps) -> String {
     let names: Vec<&str> = props.series.iter().map(|s| s.name.as_str()).filter(|n| !n.is_empty()).collect();
     let of = if names.is_empty() { String::new() } else { format!(": {}", names.join(", ")) };
     format!("{}{of}; {} over {}", props.title, props.y.words, props.x.words)
-}
-
-/// What is cut off at the frame.
-fn inside(layout: &Layout, props: &LineChartProps) -> Html {
-    let [x, y, w, h] = [layout.left, layout.top, layout.width(), layout.height()].map(px);
-    let upright = |u: &Upright| {
-        let class = classes!("upright", u.chosen.then_some("is-chosen"));
-        let at = px(layout.x.px(u.x));
-        html! {
-            <line {class} x1={at.clone()} x2={at} y1={px(layout.top)} y2={px(layout.low)}><title>{ &u.name }</title></line>
-        }
-    };
-    let curve = |s: &Series| {
-        let class = match s.stroke {
-            Stroke::Solid => "curve",
-            Stroke::Dashed => "curve is-dashed",
-            Stroke::Dotted => "curve is-dotted",
-        };
-        html! { <path {class} d={polyline(s.points.iter().map(|p| layout.place(*p)))} /> }
-    };
-    html! {
-        <svg x={x.clone()} y={y.clone()} width={w.clone()} height={h.clone()} viewBox={format!("{x} {y} {w} {h}")} aria-hidden="true">
-            { for props.spans.iter().map(|s| span(layout, s)) }
-            { rows(&placed(&layout.y, &props.y.unit, layout.rows), layout.left, layout.right) }
-            if layout.y.holds(0.0) {
-                <line class="zero" x1={px(layout.left)} x2={px(layout.right)} y1={px(layout.y.px(0.0))} y2={px(layout.y.px(0.0))} />
-            }
-            { for props.limits.iter().map(|l| limit(layout, l)) }
-            { for props.uprights.iter().map(upright) }
-            { for props.series.iter().map(curve) }
-        </svg>
-    }
-}
-
-fn span(layout: &Layout, span: &Span) -> Html {
-    let (from, to) = (layout.x.px(layout.x.held(span.x.0)), layout.x.px(layout.x.held(span.x.1)));
-    let class = match span.kind {
-        SpanKind::Working => "working-band is-edged",
-        SpanKind::Stalled => "stalled is-quiet",
-    };
-    html! { <rect {class} x={px(from)} y={px(layout.top)} width={px((to - from).max(0.0))} height={px(layout.height())} /> }
-}
-
-fn limit(layout: &Layout, limit: &Limit) -> Html {
-    let at = layout.y.px(layout.y.held(limit.y));
-    let (from, to) = if limit.above { (layout.top, at) } else { (at, layout.low) };
-    let (left, right) = (px(layout.left), px(layout.right));
-    html! {
-        <>
-            <rect class="past-limit" x={left.clone()} y={px(from)} width={px(layout.width())} height={px((to - from).max(0.0))} />
-            <line class="limit" x1={left} x2={right} y1={px(at)} y2={px(at)} />
-        </>
-    }
 }
 
 fn axes(layout: &Layout, props: &LineChartProps) -> Html {
