@@ -5,3 +5,4 @@
 pub mod browser;
 pub mod reference;
 pub mod tools;
+pub mod tunnel;

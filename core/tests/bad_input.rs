@@ -1,0 +1,119 @@
+//! Bad job files are refused by path, with what was found and what is allowed.
+
+use serde_json::{Value, json};
+use spokeshave::job::{DEMOS, Job, JobError, MOST_BYTES};
+
+fn demo() -> Value {
+    serde_json::from_str(DEMOS[0].json).unwrap()
+}
+
+/// The message for the demo with one place changed by JSON pointer (`null` takes it out).
+fn refusal(pointer: &str, value: Value) -> String {
+    let mut document = demo();
+    let (parent, name) = pointer.rsplit_once('/').unwrap();
+    let parent = document.pointer_mut(parent).unwrap();
+    match (parent, value) {
+        (Value::Object(object), Value::Null) => drop(object.remove(name)),
+        (Value::Object(object), value) => drop(object.insert(name.into(), value)),
+        (Value::Array(array), value) => array[name.parse::<usize>().unwrap()] = value,
+        _ => panic!("{pointer}"),
+    }
+    Job::from_json(&document.to_string()).unwrap_err().to_string()
+}
+
+#[test]
+fn each_wrong_value_is_named_by_its_path() {
+    let cases = [
+        ("/propeller/stations/3/chord_m", json!(-0.1), "propeller.stations[3].chord_m: -0.1"),
+        ("/propeller/stations/3/chord_m", json!("wide"), "propeller.stations[3].chord_m: invalid type"),
+        ("/propeller/stations/3/radius_fraction", json!(0.1), "propeller.stations[3].radius_fraction: 0.1"),
+        ("/propeller/stations/3/section", json!("plank"), "propeller.stations[3].section: \"plank\""),
+        ("/propeller/stations/3/angle_deg", Value::Null, "propeller.stations[3].angle_deg: missing"),
+        ("/propeller/stations/3/angle", json!(1), "propeller.stations[3].angle: unknown field"),
+        ("/propeller/stations/3/thickness_ratio", json!(0.0), "propeller.stations[3].thickness_ratio: 0"),
+        ("/propeller/stations", json!([]), "propeller.stations: 0"),
+        ("/propeller/hub_diameter_m", json!(1.6), "propeller.hub_diameter_m: 1.6"),
+        ("/propeller/blades", json!(0), "propeller.blades: 0"),
+        ("/propeller/pitch_control", json!({"kind": "magic"}), "propeller.pitch_control"),
+        ("/engine/full_throttle/1/rpm", json!("fast"), "engine.full_throttle[1].rpm: invalid type"),
+        ("/engine/full_throttle/1/rpm", json!(1000), "engine.full_throttle[1].rpm: 1000"),
+        ("/engine/kind", json!("steam"), "engine.kind: \"steam\""),
+        ("/engine/altitude_law", json!({"kind": "held-to"}), "engine.altitude_law: missing field"),
+        ("/engine/turbo", json!(true), "engine.turbo: unknown field"),
+        ("/aircraft/drag/cd0", json!(-0.03), "aircraft.drag.cd0: -0.03"),
+        ("/aircraft/drag/k", Value::Null, "aircraft.drag: "),
+        ("/aircraft/mass_kg", Value::Null, "aircraft: missing field `mass_kg`"),
+        ("/flight_points/0/setting", json!({"kind": "rpm", "rpm": 0}), "flight_points[0].setting.rpm: 0"),
+        ("/flight_points/0/setting", json!({"kind": "hope"}), "flight_points[0].setting"),
+        ("/flight_points/2/airspeed_m_s", Value::Null, "flight_points[2].airspeed_m_s: missing"),
+        ("/flight_points/2/altitude_m", json!(30_000), "flight_points[2].altitude_m: 30000"),
+        ("/flight_points/1/name", json!("Standing start"), "flight_points[1].name"),
+        ("/flight_points", json!([]), "flight_points: 0"),
+        ("/method", json!({"elements": 4}), "method.elements: 4"),
+        ("/colour", json!("red"), "colour: unknown field"),
+        ("/spokeshave", json!(7), "spokeshave: 7"),
+        ("/spokeshave", Value::Null, "spokeshave: missing"),
+        ("/propeller", Value::Null, "missing field `propeller`"),
+    ];
+    for (pointer, value, expected) in cases {
+        let message = refusal(pointer, value.clone());
+        assert!(message.contains(expected), "{pointer} = {value}: {message:?} has no {expected:?}");
+    }
+}
+
+#[test]
+fn wrong_tables_are_named_by_row() {
+    let row = |a: f64, cl: f64, cd: f64| json!({"alpha_deg": a, "cl": cl, "cd": cd});
+    let good: Vec<Value> = (0..6).map(|i| row(f64::from(i), 0.1 * f64::from(i), 0.01)).collect();
+    let with = |points: Vec<Value>| json!([{"name": "own", "polars": [{"reynolds": 1e5, "points": points}]}]);
+    let changed = |i: usize, p: Value| {
+        let mut points = good.clone();
+        points[i] = p;
+        with(points)
+    };
+    let cases = [
+        (with(vec![]), "sections[0].polars[0].points: 0 rows"),
+        (changed(2, row(2.0, 0.2, -0.01)), "sections[0].polars[0].points[2].cd: -0.01"),
+        (changed(2, row(0.5, 0.2, 0.01)), "sections[0].polars[0].points[2].alpha_deg: 0.5"),
+        (changed(5, row(500.0, 0.2, 0.01)), "sections[0].polars[0].points[5].alpha_deg: 500"),
+        (json!([{"name": "own", "polars": []}]), "sections[0].polars: 0"),
+        (
+            changed(2, json!({"alpha_deg": 2.0, "cl": "NaN", "cd": 0.01})),
+            "sections[0].polars[0].points[2].cl",
+        ),
+    ];
+    for (sections, expected) in cases {
+        let message = refusal("/sections", sections);
+        assert!(message.contains(expected), "{message:?} has no {expected:?}");
+    }
+}
+
+#[test]
+fn broken_text_is_refused_with_its_line() {
+    let text = DEMOS[0].json;
+    let cut = Job::from_json(&text[..text.len() / 2]).unwrap_err();
+    assert!(matches!(cut, JobError::Syntax { line, .. } if line > 10), "{cut}");
+    for wrong in ["", "null", "[]", "NaN", "{\"spokeshave\": 1e999}", "\u{0}"] {
+        assert!(Job::from_json(wrong).is_err(), "{wrong:?}");
+    }
+    let not_finite = text.replace("430.0", "1e999");
+    assert!(Job::from_json(&not_finite).unwrap_err().to_string().contains("line"));
+}
+
+#[test]
+fn a_huge_file_is_refused_by_its_size() {
+    let huge = " ".repeat(MOST_BYTES + 1);
+    assert!(matches!(Job::from_json(&huge), Err(JobError::TooLarge { .. })));
+}
+
+#[test]
+fn values_that_are_not_finite_are_refused_however_they_come() {
+    let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    job.propeller.stations[2].chord_m = f64::NAN;
+    job.propeller.diameter_m = f64::INFINITY;
+    job.flight_points[0].airspeed_m_s = Some(f64::NAN);
+    let paths: Vec<String> = job.check().into_iter().map(|p| p.path).collect();
+    for path in ["propeller.stations[2].chord_m", "propeller.diameter_m", "flight_points[0].airspeed_m_s"] {
+        assert!(paths.iter().any(|p| p == path), "{path} is not among {paths:?}");
+    }
+}

@@ -1,0 +1,228 @@
+//! What must hold for any valid job: no panic, every figure finite, and the laws that no propeller escapes.
+
+use proptest::prelude::*;
+use serde_json::Value;
+use spokeshave::job::{AngleReference, DEMOS, FlightPoint, Job, PitchControl, Setting, Station};
+use spokeshave::rig::Rig;
+use spokeshave::rotor::{Coefficients, Condition};
+use spokeshave::section::library;
+
+/// Stations at rising radii with any chord, angle, thickness and shipped section.
+fn stations() -> impl Strategy<Value = Vec<Station>> {
+    let names: Vec<String> = library().names().map(String::from).collect();
+    let one = (0.01..1.0f64, 0.01..0.4f64, -90.0..90.0f64, 0.01..0.6f64, prop::sample::select(names));
+    prop::collection::vec(one, 2..14).prop_map(|rows| {
+        let total: f64 = rows.iter().map(|r| r.0).sum();
+        let mut x = 0.0;
+        rows.into_iter()
+            .map(|(step, chord, angle, thickness_ratio, section)| {
+                x += step / total;
+                let angle_deg = Some(angle);
+                Station {
+                    radius_fraction: x.min(1.0),
+                    chord_m: chord,
+                    angle_deg,
+                    pitch_m: None,
+                    thickness_ratio,
+                    section,
+                }
+            })
+            .collect()
+    })
+}
+
+fn settings() -> impl Strategy<Value = Setting> {
+    prop_oneof![
+        (1.0..20_000.0f64).prop_map(|rpm| Setting::Rpm { rpm }),
+        (1.0..200_000.0f64).prop_map(|power_w| Setting::Power { power_w }),
+        (0.01..1.0f64).prop_map(|fraction| Setting::Throttle { fraction }),
+        Just(Setting::FullThrottle {}),
+        Just(Setting::Level {}),
+    ]
+}
+
+fn pitch_controls() -> impl Strategy<Value = PitchControl> {
+    prop_oneof![
+        Just(PitchControl::Fixed {}),
+        (-40.0..40.0f64).prop_map(|turn_deg| PitchControl::GroundAdjustable { turn_deg }),
+        (500.0..5_000.0f64, -20.0..5.0f64, 5.0..40.0f64).prop_map(|(rpm, turn_min_deg, turn_max_deg)| {
+            PitchControl::ConstantSpeed { rpm, turn_min_deg, turn_max_deg }
+        }),
+    ]
+}
+
+prop_compose! {
+    fn jobs()(
+        demo in 0usize..3, stations in stations(), setting in settings(), pitch_control in pitch_controls(),
+        airspeed in 0.0..340.0f64, altitude_m in -1000.0..20_000.0f64, isa_offset_k in -60.0..60.0f64,
+        blades in 1u32..=12, hub in 0.0..0.9f64, compressibility: bool, stall_delay: bool, hub_loss: bool,
+    ) -> Job {
+        let mut job = Job::from_json(DEMOS[demo].json).expect("a valid demo");
+        job.propeller.stations = stations;
+        job.propeller.blades = blades;
+        job.propeller.diameter_m = job.propeller.diameter_m.max(0.5);
+        job.propeller.hub_diameter_m = hub * job.propeller.diameter_m;
+        job.propeller.pitch_control = pitch_control;
+        (job.method.compressibility, job.method.stall_delay, job.method.hub_loss) = (compressibility, stall_delay, hub_loss);
+        let top = FlightPoint { name: "top".into(), altitude_m, isa_offset_k, airspeed_m_s: None, setting: Setting::FullThrottle {} };
+        let asked = FlightPoint { name: "asked".into(), airspeed_m_s: Some(airspeed), setting, ..top.clone() };
+        job.flight_points = vec![asked, top];
+        job
+    }
+}
+
+/// Every null of an answered flight point that is not one of those that may be.
+fn unexpected_nulls(point: &Value) -> Vec<String> {
+    const MAY: [&str; 7] = [
+        "efficiency",
+        "figure_of_merit",
+        "slip",
+        "ct_over_cq",
+        "angle_of_attack_075_deg",
+        "airspeed_m_s",
+        "rpm",
+    ];
+    let fields = point.as_object().into_iter().flatten();
+    fields.filter(|(k, v)| v.is_null() && !MAY.contains(&k.as_str())).map(|(k, _)| k.clone()).collect()
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(80))]
+
+    #[test]
+    fn any_valid_job_is_answered_without_panic_or_a_figure_that_is_not_finite(job in jobs()) {
+        prop_assert_eq!(job.check(), vec![]);
+        let rig = Rig::new(&job).unwrap();
+        let analysis = serde_json::to_value(rig.analysis()).unwrap();
+        for point in analysis["flight_points"].as_array().unwrap() {
+            if point["state"] == "ok" {
+                prop_assert_eq!(unexpected_nulls(point), Vec::<String>::new(), "{}", point["name"]);
+                let eta = point["efficiency"].as_f64().unwrap_or(0.0);
+                prop_assert!(eta < 1.0, "efficiency {}", eta);
+            }
+        }
+        for index in 0..2 {
+            if let Some(map) = rig.map(index, 7, 5) {
+                prop_assert!(map.cells.iter().all(|c| c.departure_deg.is_none_or(f64::is_finite)));
+                prop_assert!(map.cells.iter().all(|c| c.share_of_best.is_none_or(f64::is_finite)));
+            }
+        }
+    }
+
+    #[test]
+    fn a_job_survives_its_own_file(job in jobs()) {
+        prop_assert_eq!(Job::from_json(&job.to_json()).unwrap(), job);
+    }
+
+    #[test]
+    fn any_text_is_read_or_refused(text in "\\PC*") {
+        let _ = Job::from_json(&text);
+    }
+
+    #[test]
+    fn any_cut_or_changed_job_is_read_or_refused(cut in 0usize..4000, at in 0usize..4000, with in "[0-9a-z{}\\[\\],:\"-]") {
+        let text = DEMOS[0].json;
+        let cut = text.get(..cut.min(text.len())).unwrap_or(text);
+        let _ = Job::from_json(cut);
+        let mut changed = text.to_string();
+        if changed.is_char_boundary(at) && changed.is_char_boundary(at + 1) && at + 1 < changed.len() {
+            changed.replace_range(at..=at, &with);
+        }
+        if let Ok(job) = Job::from_json(&changed) {
+            let _ = Rig::new(&job).unwrap().analysis();
+        }
+    }
+}
+
+fn demo_at(airspeed_m_s: f64, rpm: f64) -> (Rig, Condition) {
+    let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    job.flight_points[0].airspeed_m_s = Some(airspeed_m_s);
+    job.flight_points[0].setting = Setting::Rpm { rpm };
+    let rig = Rig::new(&job).unwrap();
+    let at = rig.condition(0).unwrap();
+    (rig, at)
+}
+
+/// `Ω dQ = dT (V + u) + (dQ/r) v + ρ/2 W³ B c cd dr`: the work put in is the work done on the air and the drag's.
+#[test]
+fn energy_is_kept_at_every_station() {
+    for (v, rpm) in [(0.0, 2600.0), (30.0, 2700.0), (50.0, 2700.0), (75.0, 2700.0), (110.0, 2700.0)] {
+        let (rig, at) = demo_at(v, rpm);
+        for r in rig.rotor.blade.station_radii_m() {
+            let ring = rig.rotor.ring(r);
+            let b = rig.rotor.element(&ring, &at).0.balance().unwrap();
+            let (thrust, torque) = rig.rotor.grading(&ring, &at, &b);
+            let drag =
+                0.5 * at.air.density_kg_m3 * b.speed_m_s.powi(3) * 2.0 * ring.cut.chord_m * b.section.cd;
+            let work = thrust * (v + b.induced_axial_m_s) + torque / r * b.induced_swirl_m_s + drag;
+            let put_in = torque * at.rotation_rad_s;
+            assert!((work - put_in).abs() < 1e-9 * (put_in.abs() + drag), "{v} m/s, {r} m: {work} {put_in}");
+        }
+    }
+}
+
+/// R. E. Froude's actuator disc: no propeller does better than `2/(1 + sqrt(1 + Tc))`, `Tc = T/(ρ/2 V² π R²)`, nor than a
+/// figure of merit of 1 at rest.
+#[test]
+fn no_propeller_beats_the_actuator_disc() {
+    for v in [5.0, 15.0, 30.0, 45.0, 55.0] {
+        let (rig, at) = demo_at(v, 2700.0);
+        let loads = rig.rotor.loads(&at);
+        let r = rig.rotor.blade.radius_m;
+        let tc = loads.thrust_n / (0.5 * at.air.density_kg_m3 * v * v * std::f64::consts::PI * r * r);
+        let efficiency = Coefficients::new(&loads, &at, 2.0 * r).efficiency.unwrap();
+        assert!(efficiency < 2.0 / (1.0 + (1.0 + tc).sqrt()), "{v}");
+    }
+    let (rig, _) = demo_at(0.0, 2700.0);
+    assert!(rig.point(0).unwrap().figures.figure_of_merit.unwrap() < 1.0);
+}
+
+#[test]
+fn thrust_is_gone_before_power_is() {
+    let (rig, at) = demo_at(0.0, 2700.0);
+    let curve = rig.curves(0, 40);
+    let last = curve.last().unwrap();
+    assert!(last.coefficients.ct.abs() < 1e-4 && last.coefficients.cp > 0.0, "{last:?}");
+    assert!(at.airspeed_m_s == 0.0);
+}
+
+#[test]
+fn more_elements_change_little() {
+    let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    let mut thrust = |elements: u32| {
+        job.method.elements = elements;
+        let rig = Rig::new(&job).unwrap();
+        rig.rotor.loads(&rig.condition(2).unwrap()).thrust_n
+    };
+    let (coarse, fine) = (thrust(40), thrust(320));
+    assert!((coarse / fine - 1.0).abs() < 1e-3, "{coarse} {fine}");
+}
+
+/// A protractor on the flat face reads less than the chord line by the section's own angle.
+#[test]
+fn the_same_blade_by_its_flat_face_gives_the_same_answer() {
+    let job = Job::from_json(DEMOS[0].json).unwrap();
+    let chord = Rig::new(&job).unwrap();
+    let mut by_face = job.clone();
+    by_face.propeller.angle_reference = AngleReference::FlatFace;
+    for (s, r) in by_face.propeller.stations.iter_mut().zip(chord.rotor.blade.station_radii_m()) {
+        let off = chord.rotor.blade.face_to_chord_rad(r).unwrap().to_degrees();
+        assert!(off > 0.5 && off < 6.0);
+        s.angle_deg = s.angle_deg.map(|a| a - off);
+    }
+    let (a, b) = (chord.point(2).unwrap(), Rig::new(&by_face).unwrap().point(2).unwrap());
+    assert!((a.figures.thrust_n.unwrap() - b.figures.thrust_n.unwrap()).abs() < 1e-6);
+}
+
+#[test]
+fn pitch_and_angle_say_the_same() {
+    let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    let before = Rig::new(&job).unwrap().point(0).unwrap();
+    let radius = job.propeller.diameter_m / 2.0;
+    for s in &mut job.propeller.stations {
+        let tan = s.angle_deg.take().unwrap().to_radians().tan();
+        s.pitch_m = Some(std::f64::consts::TAU * s.radius_fraction * radius * tan);
+    }
+    let after = Rig::new(&job).unwrap().point(0).unwrap();
+    assert!((before.figures.thrust_n.unwrap() - after.figures.thrust_n.unwrap()).abs() < 1e-6);
+}
