@@ -92,12 +92,11 @@ impl Blade {
         let mut families: Vec<Arc<Family>> = Vec::new();
         let mut stations = Vec::new();
         for (i, s) in p.stations.iter().enumerate() {
-            let index = match families.iter().position(|f| f.about.name == s.section) {
-                Some(index) => index,
-                None => {
-                    families.push(family(job, i, &s.section)?);
-                    families.len() - 1
-                }
+            let index = if let Some(known) = families.iter().position(|f| f.about.name == s.section) {
+                known
+            } else {
+                families.push(family(job, i, &s.section)?);
+                families.len() - 1
             };
             stations.push((s.radius_fraction * radius_m, index));
         }

@@ -16,9 +16,11 @@ use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, Loads};
 
 mod line;
+mod meeting;
 mod top_speed;
 
 pub use line::line;
+pub use meeting::meeting;
 
 /// Fastest tip considered where no engine sets a limit, as a Mach number.
 const FASTEST_TIP_MACH: f64 = 1.2;

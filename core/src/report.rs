@@ -4,7 +4,7 @@ use std::f64::consts::PI;
 
 use crate::air::Air;
 use crate::job::FlightPoint;
-use crate::result::{Figures, Note, PointResult, SectionPoint, State, StationResult};
+use crate::result::{Figures, Meeting, Note, PointResult, SectionPoint, State, StationResult};
 use crate::rotor::element::{Balance, Element};
 use crate::rotor::{Coefficients, Condition, Loads, Ring, Rotor};
 use crate::section::{Best, Situation, best, working_band};
@@ -26,6 +26,7 @@ pub fn point(rotor: &Rotor, point: &FlightPoint, at: &Condition) -> PointResult 
         turn_deg: at.turn_rad.to_degrees(),
         density_kg_m3: at.air.density_kg_m3,
         figures: figures(rotor, at, &loads),
+        meeting: Meeting::default(),
         notes: point_notes(&stations, &loads),
         stations,
     }
@@ -42,6 +43,7 @@ pub fn unanswered(point: &FlightPoint, air: &Air, state: State, turn_rad: f64) -
         turn_deg: turn_rad.to_degrees(),
         density_kg_m3: air.density_kg_m3,
         figures: Figures::default(),
+        meeting: Meeting::default(),
         stations: Vec::new(),
         notes: Vec::new(),
     }

@@ -124,6 +124,9 @@ pub struct PointResult {
     /// The figures of the whole propeller; null in the JSON when there is no answer.
     #[serde(flatten)]
     pub figures: Figures,
+    /// What the engine and the aircraft make of it.
+    #[serde(flatten)]
+    pub meeting: Meeting,
     /// Figures by station, of the job file's stations.
     pub stations: Vec<StationResult>,
     /// What holds somewhere on the blade.
@@ -167,6 +170,34 @@ pub struct Figures {
     pub effective_pitch_m: Option<f64>,
     /// Slip, `1 − effective/geometric pitch`.
     pub slip: Option<f64>,
+}
+
+/// What engine and aircraft make of a propeller's condition. `None` where the job has no engine or aircraft, or it does not
+/// apply.
+#[derive(Clone, Debug, Default, PartialEq, Serialize)]
+pub struct Meeting {
+    /// Engine or motor rpm.
+    pub engine_rpm: Option<f64>,
+    /// Shaft power at full throttle at this rpm, per engine, W.
+    pub available_power_w: Option<f64>,
+    /// Shaft power over the available power.
+    pub power_share: Option<f64>,
+    /// Thrust over all propellers, N.
+    pub total_thrust_n: Option<f64>,
+    /// Drag of the aeroplane in level flight at this speed, or the weight of a multirotor, N.
+    pub asked_n: Option<f64>,
+    /// Rate of climb `(T − D) V/W` of an aeroplane, lift taken as weight, m/s.
+    pub rate_of_climb_m_s: Option<f64>,
+    /// Fuel flow of all engines, kg/h.
+    pub fuel_kg_per_h: Option<f64>,
+    /// Motor current, A.
+    pub motor_current_a: Option<f64>,
+    /// Battery current, A.
+    pub battery_current_a: Option<f64>,
+    /// Battery voltage under load, V.
+    pub battery_voltage_v: Option<f64>,
+    /// Duty of the controller, 0 to 1.
+    pub duty: Option<f64>,
 }
 
 /// One station worked out.

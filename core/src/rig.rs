@@ -69,7 +69,11 @@ impl Rig {
         let point = self.job.flight_points.get(index)?;
         let air = air_of(point).ok()?;
         Some(match fit::condition(self, point, air) {
-            Ok(at) => report::point(&self.rotor, point, &at),
+            Ok(at) => {
+                let mut result = report::point(&self.rotor, point, &at);
+                result.meeting = fit::meeting(self, &at, &result.figures);
+                result
+            }
             Err(state) => report::unanswered(point, &air, state, self.turn_rad()),
         })
     }

@@ -1,5 +1,6 @@
 //! Checks of a job's values, each by path.
 
+use std::fmt::Display;
 use std::ops::RangeInclusive;
 
 use super::document::{
@@ -20,7 +21,7 @@ const MOST_TEXT: usize = 200;
 struct Found(Vec<Problem>);
 
 impl Found {
-    fn refuse(&mut self, path: String, found: impl ToString, allowed: impl Into<String>) {
+    fn refuse(&mut self, path: String, found: impl Display, allowed: impl Into<String>) {
         self.0.push(Problem { path, found: found.to_string(), allowed: allowed.into(), span: None });
     }
 

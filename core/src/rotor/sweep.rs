@@ -75,6 +75,7 @@ pub fn curve_point(rotor: &Rotor, at: &Condition, airspeed_m_s: f64) -> CurvePoi
 }
 
 /// The speed (m/s) at which thrust is gone, by steps of a tenth in J and halving; at most J = 6.
+#[must_use]
 pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
     let unit = at.turns_per_s() * 2.0 * rotor.blade.radius_m;
     let thrust = |j: f64| rotor.loads(&Condition { airspeed_m_s: j * unit, ..*at }).thrust_n;

@@ -54,7 +54,11 @@ pub struct TableError {
 }
 
 impl TableError {
-    pub(super) fn new(place: impl Into<String>, found: impl ToString, allowed: impl Into<String>) -> Self {
+    pub(super) fn new(
+        place: impl Into<String>,
+        found: impl std::fmt::Display,
+        allowed: impl Into<String>,
+    ) -> Self {
         Self { place: place.into(), found: found.to_string(), allowed: allowed.into() }
     }
 }

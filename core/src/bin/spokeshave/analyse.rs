@@ -51,7 +51,8 @@ fn text(analysis: &Analysis) -> String {
     );
     out += &points_table(&analysis.flight_points);
     for point in &analysis.flight_points {
-        out += &format!("\n\n{}", stations_text(point));
+        out += "\n\n";
+        out += &stations_text(point);
     }
     out + "\n\nDeparture is the angle of attack less the angle of best lift-to-drag: below zero the station is slack, above it hard."
 }

@@ -19,7 +19,7 @@ pub(crate) enum Stop {
 }
 
 impl Stop {
-    pub(crate) fn bad(message: impl ToString) -> Self {
+    pub(crate) fn bad(message: impl std::fmt::Display) -> Self {
         Self::BadInput(message.to_string())
     }
 }

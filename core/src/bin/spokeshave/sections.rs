@@ -26,7 +26,7 @@ pub(crate) fn run(_: &Args) -> Outcome {
             ns.join(", "),
             if family.about.face_angle_deg.is_empty() { "no" } else { "yes" }.to_string(),
         ]);
-        origins += &format!("\n\n{}: {}", family.about.title, family.about.origin);
+        origins += &["\n\n", &family.about.title, ": ", &family.about.origin].concat();
     }
     print(&(table(&["family", "thickness %", "Re/1000", "n at transition", "flat face"], rows) + &origins))?;
     Ok(true)

@@ -1,0 +1,46 @@
+//! What engine and aircraft make of a propeller's condition.
+
+use super::rpm_of;
+use crate::aircraft::{propellers, thrust_asked_n, weight_n};
+use crate::job::Aircraft;
+use crate::result::{Figures, Meeting};
+use crate::rig::Rig;
+use crate::rotor::Condition;
+
+/// The meeting at a condition, from the propeller's figures there.
+#[must_use]
+pub fn meeting(rig: &Rig, at: &Condition, figures: &Figures) -> Meeting {
+    let mut m = Meeting::default();
+    add_engine(&mut m, rig, at, figures);
+    add_aircraft(&mut m, rig, at, figures);
+    m
+}
+
+fn add_engine(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
+    let (Some(shaft), Some(power)) = (&rig.shaft, figures.power_w) else { return };
+    let rpm = rpm_of(at);
+    m.engine_rpm = Some(rpm * shaft.gear_ratio());
+    let (low, high) = shaft.rpm_range();
+    // Outside the curve nothing is known: there is no extrapolation.
+    let available = (low..=high * (1.0 + 1e-9)).contains(&rpm).then(|| shaft.power_w(rpm, &at.air, 1.0));
+    m.available_power_w = available.filter(|p| *p > 0.0);
+    m.power_share = m.available_power_w.map(|a| power / a);
+    let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
+    m.fuel_kg_per_h = shaft.fuel_kg_s(power).map(|f| 3600.0 * f * engines);
+    if let Some(e) = shaft.electrics(rpm, power) {
+        m.motor_current_a = Some(e.motor_current_a);
+        m.battery_current_a = Some(e.battery_current_a);
+        m.battery_voltage_v = Some(e.battery_voltage_v);
+        m.duty = Some(e.duty);
+    }
+}
+
+fn add_aircraft(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
+    let (Some(aircraft), Some(thrust)) = (&rig.job.aircraft, figures.thrust_n) else { return };
+    let total = thrust * propellers(aircraft);
+    m.total_thrust_n = Some(total);
+    m.asked_n = thrust_asked_n(aircraft, &at.air, at.airspeed_m_s).map(|each| each * propellers(aircraft));
+    if let (Aircraft::Aeroplane(_), Some(drag)) = (aircraft, m.asked_n) {
+        m.rate_of_climb_m_s = Some((total - drag) * at.airspeed_m_s / weight_n(aircraft));
+    }
+}
