@@ -67,6 +67,7 @@ pub fn figures(rotor: &Rotor, at: &Condition, loads: &Loads) -> Figures {
         cq: finite(c.cq),
         ct_over_cq: finite(c.ct / c.cq),
         efficiency: c.efficiency,
+        ideal_efficiency: c.ideal_efficiency(),
         figure_of_merit: figure_of_merit(at, loads, blade.radius_m),
         thrust_n: finite(loads.thrust_n),
         torque_n_m: finite(loads.torque_n_m),

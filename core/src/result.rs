@@ -148,6 +148,8 @@ pub struct Figures {
     pub ct_over_cq: Option<f64>,
     /// `T V/P`, when thrust, speed and power are positive.
     pub efficiency: Option<f64>,
+    /// What an actuator disc of this size, without drag or swirl, would reach at this thrust: `2/(1 + sqrt(1 + Tc))`.
+    pub ideal_efficiency: Option<f64>,
     /// `T^1.5/(sqrt(2 ρ π R²) P)` at rest.
     pub figure_of_merit: Option<f64>,
     /// Thrust, N.

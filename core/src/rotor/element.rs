@@ -273,3 +273,6 @@ fn stepped(phi: f64, end: f64) -> f64 {
     let step = STEP_RAD.copysign(end - phi);
     if (end - phi).abs() <= STEP_RAD { end } else { phi + step }
 }
+
+#[cfg(test)]
+mod tests;

@@ -40,6 +40,19 @@ impl Coefficients {
     }
 }
 
+impl Coefficients {
+    /// Efficiency of an actuator disc at this thrust and speed: `2/(1 + sqrt(1 + Tc))`, `Tc = 8 CT/(π J²)`. `None` at rest
+    /// or without thrust.
+    ///
+    /// # References
+    /// W. J. M. Rankine 1865 and R. E. Froude 1889; H. Glauert, *Airplane Propellers*, 1935.
+    #[must_use]
+    pub fn ideal_efficiency(&self) -> Option<f64> {
+        let tc = 8.0 * self.ct / (std::f64::consts::PI * self.advance_ratio * self.advance_ratio);
+        (self.advance_ratio > 0.0 && self.ct > 0.0).then(|| 2.0 / (1.0 + (1.0 + tc).sqrt()))
+    }
+}
+
 /// One point of the coefficient curves.
 #[derive(Clone, Copy, Debug, PartialEq, Serialize)]
 pub struct CurvePoint {
@@ -87,4 +100,20 @@ pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
         if thrust(middle) < 0.0 { high = middle } else { low = middle }
     }
     low.max(0.1) * unit
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// Actuator disc, computed from the formula: (J 0.5, CT 0.05) 0.89745; (0.5, 0.10) 0.82618; (0.8, 0.10) 0.91645.
+    #[test]
+    fn the_actuator_disc_sets_the_limit() {
+        for (advance_ratio, ct, expected) in
+            [(0.5, 0.05, 0.89745), (0.5, 0.10, 0.82618), (0.8, 0.10, 0.91645)]
+        {
+            let c = Coefficients { advance_ratio, ct, cp: 0.1, cq: 0.016, efficiency: None };
+            assert!((c.ideal_efficiency().unwrap() - expected).abs() < 5e-6);
+        }
+    }
 }

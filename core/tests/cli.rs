@@ -1,0 +1,172 @@
+//! The command line as a script meets it: output, exit codes, messages.
+#![cfg(feature = "cli")]
+
+use std::io::Write;
+use std::process::{Command, Output, Stdio};
+
+use serde_json::Value;
+use spokeshave::job::{DEMOS, Job};
+use spokeshave::rig::Rig;
+
+fn run(args: &[&str], input: &str) -> Output {
+    let mut child = Command::new(env!("CARGO_BIN_EXE_spokeshave"))
+        .args(args)
+        .stdin(Stdio::piped())
+        .stdout(Stdio::piped())
+        .stderr(Stdio::piped())
+        .spawn()
+        .unwrap();
+    // A command that refuses its arguments closes its input early.
+    let _ = child.stdin.take().unwrap().write_all(input.as_bytes());
+    child.wait_with_output().unwrap()
+}
+
+fn out(o: &Output) -> String {
+    String::from_utf8(o.stdout.clone()).unwrap()
+}
+
+fn err(o: &Output) -> String {
+    String::from_utf8(o.stderr.clone()).unwrap()
+}
+
+#[test]
+fn analyse_prints_the_library_s_numbers_as_json() {
+    for demo in DEMOS {
+        let o = run(&["analyse", "-", "--json"], demo.json);
+        assert_eq!(o.status.code(), Some(0), "{}", err(&o));
+        let got: Value = serde_json::from_str(&out(&o)).unwrap();
+        let expected = Rig::new(&Job::from_json(demo.json).unwrap()).unwrap().analysis();
+        assert_eq!(got, serde_json::to_value(expected).unwrap(), "{}", demo.name);
+    }
+}
+
+/// The names other programs rely on.
+#[test]
+fn the_fixed_names_are_there() {
+    let got: Value =
+        serde_json::from_str(&out(&run(&["analyse", "--demo", "light-aeroplane", "--json"], ""))).unwrap();
+    let point = &got["flight_points"][2];
+    for name in [
+        "name",
+        "state",
+        "airspeed_m_s",
+        "rpm",
+        "density_kg_m3",
+        "advance_ratio",
+        "ct",
+        "cp",
+        "cq",
+        "efficiency",
+        "figure_of_merit",
+        "thrust_n",
+        "torque_n_m",
+        "power_w",
+        "tip_mach",
+        "blade_angle_075_deg",
+        "advance_angle_075_deg",
+        "geometric_pitch_m",
+        "effective_pitch_m",
+        "slip",
+        "stations",
+        "notes",
+    ] {
+        assert!(point.get(name).is_some(), "{name}");
+    }
+    for name in [
+        "radius_m",
+        "radius_fraction",
+        "chord_m",
+        "blade_angle_deg",
+        "inflow_angle_deg",
+        "angle_of_attack_deg",
+        "best_angle_deg",
+        "departure_deg",
+        "share_of_best",
+        "cl",
+        "cd",
+        "reynolds",
+        "mach",
+        "axial_factor",
+        "swirl_factor",
+        "loss_factor",
+        "thrust_n_per_m",
+        "torque_n_m_per_m",
+        "notes",
+    ] {
+        assert!(point["stations"][7].get(name).is_some(), "{name}");
+    }
+}
+
+#[test]
+fn people_get_a_table_and_scripts_a_csv() {
+    let table = out(&run(&["analyse", "--demo"], ""));
+    assert!(table.contains("departure") && table.contains("Cruise"));
+    let csv = out(&run(&["analyse", "--demo", "unmanned", "--csv"], ""));
+    let mut lines = csv.lines();
+    assert!(lines.next().unwrap().starts_with("flight_point,state,station,radius_m"));
+    let stations: usize = Job::from_json(DEMOS[1].json).unwrap().propeller.stations.len();
+    assert_eq!(lines.count(), 4 * stations);
+    for command in ["sweep", "map"] {
+        let o = run(&[command, "--demo", "light-aeroplane", "--point", "cruise", "--csv"], "");
+        assert!(o.status.success() && out(&o).lines().count() > 20, "{command}");
+    }
+}
+
+#[test]
+fn no_answer_is_exit_code_1_and_a_state() {
+    let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    job.engine = None;
+    let o = run(&["analyse", "-", "--json"], &job.to_json());
+    assert_eq!(o.status.code(), Some(1));
+    let got: Value = serde_json::from_str(&out(&o)).unwrap();
+    assert_eq!(got["flight_points"][0]["state"], "needs-engine");
+    assert!(got["flight_points"][0]["thrust_n"].is_null());
+}
+
+#[test]
+fn bad_input_is_exit_code_2_and_a_message_by_path() {
+    let negative = DEMOS[0].json.replacen("0.083", "-0.083", 1);
+    let cases = [
+        (vec!["analyse", "-"], negative.as_str(), "propeller.stations[0].chord_m: -0.083"),
+        (vec!["analyse", "-"], "{\"spokeshave\": 1", "line 1"),
+        (vec!["analyse", "no-such-file.json"], "", "no-such-file.json"),
+        (vec!["analyse", "--demo", "submarine"], "", "light-aeroplane, unmanned, multirotor"),
+        (vec!["sweep", "--demo", "unmanned", "--point", "Landing"], "", "Launch, Climb, Survey, Dash"),
+        (vec!["sweep", "--demo", "unmanned", "--steps", "0"], "", "--steps"),
+        (vec!["analyse"], "", "required"),
+        (vec!["carve"], "", "carve"),
+    ];
+    for (args, input, expected) in cases {
+        let o = run(&args, input);
+        assert_eq!(o.status.code(), Some(2), "{args:?}");
+        assert!(err(&o).contains(expected) && out(&o).is_empty(), "{args:?}: {}", err(&o));
+    }
+}
+
+#[test]
+fn the_schema_names_every_key_of_the_demos() {
+    let schema = out(&run(&["schema"], ""));
+    fn keys(value: &Value, into: &mut Vec<String>) {
+        match value {
+            Value::Object(o) => o.iter().for_each(|(k, v)| {
+                into.push(k.clone());
+                keys(v, into);
+            }),
+            Value::Array(a) => a.iter().for_each(|v| keys(v, into)),
+            _ => {}
+        }
+    }
+    let mut names = Vec::new();
+    DEMOS.iter().for_each(|d| keys(&serde_json::from_str(d.json).unwrap(), &mut names));
+    names.sort();
+    names.dedup();
+    assert!(names.len() > 40);
+    for name in names {
+        assert!(schema.contains(&format!("\"{name}\"")), "{name} is not in the schema");
+    }
+}
+
+#[test]
+fn help_has_examples() {
+    assert!(out(&run(&["--help"], "")).contains("Examples:"));
+}
