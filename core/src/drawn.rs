@@ -6,7 +6,7 @@
 use std::f64::consts::TAU;
 
 use crate::blade::Blade;
-use crate::job::{AngleReference, Job};
+use crate::job::{AngleReference, Job, Station};
 
 /// A station as drawn.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -98,6 +98,35 @@ pub fn measured_by(job: &Job, reference: AngleReference) -> Option<Job> {
     Some(other)
 }
 
+/// The job with a station more, lying on the blade as it is at a share of the tip radius, with the section of its inner
+/// neighbour. The blade itself may change a little beside it, since its curves now pass through one more point. `None`
+/// where a station stands already or for a job that [`Job::check`] refuses.
+#[must_use]
+pub fn with_station(job: &Job, radius_fraction: f64) -> Option<Job> {
+    let blade = Blade::new(job).ok()?;
+    let drawn = station(&blade, job.propeller.angle_reference, radius_fraction * blade.radius_m);
+    let mut more = job.clone();
+    let stations = &mut more.propeller.stations;
+    let at = stations.partition_point(|s| s.radius_fraction < radius_fraction);
+    let angle_deg = match job.propeller.angle_reference {
+        AngleReference::ChordLine => drawn.angle_deg,
+        AngleReference::FlatFace => drawn.face_angle_deg?,
+    };
+    let section = stations.get(at.saturating_sub(1))?.section.clone();
+    stations.insert(
+        at,
+        Station {
+            radius_fraction,
+            chord_m: drawn.chord_m,
+            angle_deg: Some(angle_deg),
+            pitch_m: None,
+            thickness_ratio: drawn.thickness_m / drawn.chord_m,
+            section,
+        },
+    );
+    more.check().is_empty().then_some(more)
+}
+
 #[cfg(test)]
 mod tests {
     use super::*;
@@ -129,6 +158,19 @@ mod tests {
         let kept = kept_angle_deg(&job, 5, AngleReference::FlatFace, drawn.face_angle_deg.unwrap()).unwrap();
         assert!((kept - drawn.angle_deg).abs() < 1e-9);
         assert_eq!(kept_angle_deg(&job, 99, AngleReference::FlatFace, 10.0), None);
+    }
+
+    #[test]
+    fn a_station_more_lies_on_the_blade() {
+        for job in [demo(), measured_by(&demo(), AngleReference::FlatFace).unwrap()] {
+            let more = with_station(&job, 0.75).unwrap();
+            let (a, b) = (Blade::new(&job).unwrap(), Blade::new(&more).unwrap());
+            assert_eq!(more.propeller.stations.len(), job.propeller.stations.len() + 1);
+            assert!((a.cut(0.57).angle_rad - b.cut(0.57).angle_rad).abs() < 1e-9);
+            assert!((a.cut(0.57).chord_m - b.cut(0.57).chord_m).abs() < 1e-12);
+        }
+        let there = demo().propeller.stations[3].radius_fraction;
+        assert_eq!(with_station(&demo(), there), None);
     }
 
     #[test]

@@ -1,18 +1,177 @@
-//! The application.
+//! The application: the state, its results, and the effects that follow from them.
 
-use crate::{keep, saved_page};
+use std::cell::RefCell;
+use std::rc::Rc;
+
+use gloo_events::EventListener;
+use spokeshave::drawn::DrawnStation;
+use spokeshave::job::Job;
+use spokeshave::result::PointResult;
+use spokeshave::rig::Rig;
+use spokeshave::rotor::{CurvePoint, DepartureMap};
+use wasm_bindgen::JsCast;
 use yew::prelude::*;
+
+use crate::effect::after_frame::{Waiting, after_frame};
+use crate::effect::remembered::Remembered;
+use crate::effect::{keys, theme};
+use crate::results::Results;
+use crate::state::{Action, State};
+use crate::view::page::Page;
+use crate::{keep, view};
+
+/// The reducer's state as the UI library wants it.
+#[derive(Clone, Debug)]
+struct Store(State);
+
+impl Reducible for Store {
+    type Action = Action;
+    fn reduce(self: Rc<Self>, action: Action) -> Rc<Self> {
+        Rc::new(Self(self.0.after(action)))
+    }
+}
+
+fn started() -> Store {
+    let kept = keep::at_start();
+    let state = State::started(kept.as_deref());
+    if kept.is_some() && state.notice.is_some() {
+        keep::set_aside();
+    }
+    Store(Remembered::read().applied(state))
+}
+
+/// A job compared by identity: every change makes a new one.
+#[derive(Clone, Debug)]
+pub struct Same(pub Rc<Job>);
+
+impl PartialEq for Same {
+    fn eq(&self, other: &Self) -> bool {
+        Rc::ptr_eq(&self.0, &other.0)
+    }
+}
+
+/// What is shown within the frame of an edit.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Now {
+    /// The job.
+    pub job: Same,
+    /// The job made ready.
+    pub rig: Option<RigRef>,
+    /// The stations as drawn.
+    pub drawn: Rc<Vec<DrawnStation>>,
+    /// The flight point selected, worked out.
+    pub point: Rc<Option<PointResult>>,
+    /// Lift-to-drag over the angle of attack, degrees, at the station selected.
+    pub lift_to_drag: Rc<Vec<[f64; 2]>>,
+    /// Whether this browser keeps the job.
+    pub kept: bool,
+}
+
+/// A rig compared by identity.
+#[derive(Clone, Debug)]
+pub struct RigRef(pub Rc<Rig>);
+
+impl PartialEq for RigRef {
+    fn eq(&self, other: &Self) -> bool {
+        Rc::ptr_eq(&self.0, &other.0)
+    }
+}
+
+/// What follows in a later frame.
+#[derive(Clone, Debug, Default, PartialEq)]
+pub struct Later {
+    /// Every flight point, in order.
+    pub points: Vec<Rc<Option<PointResult>>>,
+    /// The departure map at the flight point selected.
+    pub map: Rc<Option<DepartureMap>>,
+    /// The coefficient curves there.
+    pub curves: Rc<Vec<CurvePoint>>,
+}
+
+#[hook]
+fn use_now(results: &Rc<RefCell<Results>>, state: &State) -> Rc<Now> {
+    let results = results.clone();
+    let kept = use_memo(Same(state.job().clone()), |job| keep::before_work(&job.0.to_json()));
+    use_memo((Same(state.job().clone()), state.point, state.station), move |(job, point, station)| {
+        let mut results = results.borrow_mut();
+        let results = results.of(&job.0);
+        let section = results.section(*point, *station);
+        Now {
+            job: job.clone(),
+            rig: results.rig().map(RigRef),
+            drawn: results.drawn(),
+            point: results.point(*point),
+            lift_to_drag: Rc::new(section.iter().map(|s| [s.alpha_deg, s.lift_to_drag]).collect()),
+            kept: *kept,
+        }
+    })
+}
+
+#[hook]
+fn use_later(results: &Rc<RefCell<Results>>, now: &Rc<Now>, state: &State) -> Rc<Later> {
+    let later = use_state_eq(Rc::<Later>::default);
+    let waiting = use_mut_ref(|| None::<Waiting>);
+    let (results, setter, before) = (results.clone(), later.setter(), (*later).clone());
+    use_effect_with((now.clone(), state.point, state.drag.is_some()), move |(now, point, dragging)| {
+        let (job, point, dragging) = (now.job.clone(), *point, *dragging);
+        let points =
+            move |results: &mut Results| (0..job.0.flight_points.len()).map(|i| results.point(i)).collect();
+        // Putting off the new work calls off the old.
+        *waiting.borrow_mut() = Some(after_frame(move || {
+            let mut results = results.borrow_mut();
+            let points: Vec<_> = points(&mut results);
+            let (map, curves) = if dragging {
+                (before.map.clone(), before.curves.clone())
+            } else {
+                (results.map(point), results.curves(point))
+            };
+            setter.set(Rc::new(Later { points, map, curves }));
+            keep::after_work();
+        }));
+    });
+    (*later).clone()
+}
 
 /// The application.
 #[component]
 pub fn App() -> Html {
-    let job = keep::at_start();
-    let copy = saved_page::with_job("{}").map_or(0, |page| page.len());
+    let store = use_reducer(started);
+    let results = use_mut_ref(Results::default);
+    let now = use_now(&results, &store.0);
+    let later = use_later(&results, &now, &store.0);
+    let act = {
+        let dispatcher = store.dispatcher();
+        use_callback((), move |action: Action, ()| dispatcher.dispatch(action))
+    };
+    use_keys(&act, !store.0.drafts.is_empty());
+    use_effect_with(Remembered::of(&store.0), |remembered| remembered.write());
+    use_effect_with(store.0.theme, |picked| theme::show(*picked));
+    use_effect_with(store.0.job().title.clone(), |title| theme::title(title));
     html! {
-        <main>
-            <h1>{ "Spokeshave" }</h1>
-            <p>{ job.unwrap_or_default() }</p>
-            <p>{ format!("{copy} bytes") }</p>
-        </main>
+        <ContextProvider<view::Act> context={view::Act(act)}>
+            <Page state={view::Seen(Rc::new(store.0.clone()))} {now} {later} />
+        </ContextProvider<view::Act>>
     }
+}
+
+#[hook]
+fn use_keys(act: &Callback<Action>, drafting: bool) {
+    let act = act.clone();
+    use_effect_with(drafting, move |&drafting| {
+        let listener = web_sys::window().map(|window| {
+            EventListener::new_with_options(
+                &window,
+                "keydown",
+                gloo_events::EventListenerOptions::enable_prevent_default(),
+                move |event| {
+                    let meaning = event.dyn_ref().and_then(|key| keys::meaning(key, drafting));
+                    if let Some(action) = meaning {
+                        event.prevent_default();
+                        act.emit(action);
+                    }
+                },
+            )
+        });
+        move || drop(listener)
+    });
 }

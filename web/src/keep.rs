@@ -13,6 +13,8 @@ extern "C" {
     fn keep_before(json: &str) -> bool;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = after)]
     fn keep_after();
+    #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = setAside)]
+    fn put_aside();
     #[wasm_bindgen(js_namespace = spokeshave, js_name = crashed)]
     fn crashed(detail: &str);
 }
@@ -36,6 +38,11 @@ pub fn before_work(job: &str) -> bool {
 /// The job has been worked out; call after [`before_work`].
 pub fn after_work() {
     keep_after();
+}
+
+/// Puts a job that cannot be read aside under a key of its own, so that what is kept next does not overwrite it.
+pub fn set_aside() {
+    put_aside();
 }
 
 /// Lets a panic end in a message that offers the job, instead of a dead page.

@@ -1,10 +1,20 @@
 //! The Spokeshave page: a Yew app that runs entirely in the browser.
+//!
+//! One direction: [`state`] (pure: actions to state) → [`results`] (what the core computes, kept by what it depends on) →
+//! views. The browser is touched at the edges only: [`keep`], [`saved_page`], `effect`.
 
-mod app;
+pub mod app;
 pub mod blade_view;
 pub mod chart;
+pub mod editor;
+pub mod effect;
 pub mod keep;
+pub mod number;
+pub mod results;
 pub mod saved_page;
+pub mod state;
+pub mod units;
+pub mod view;
 
 use wasm_bindgen::prelude::wasm_bindgen;
 

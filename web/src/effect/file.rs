@@ -1,0 +1,77 @@
+//! Files: offering one for download, reading one that was picked.
+
+use gloo_file::callbacks::{FileReader, read_as_text};
+use gloo_file::{Blob, ObjectUrl};
+use spokeshave::job::MOST_BYTES;
+use wasm_bindgen::JsCast;
+use web_sys::{HtmlAnchorElement, HtmlInputElement};
+
+use crate::number::fixed;
+use crate::state::{Action, Notice};
+
+/// Offers a text as a file. Returns whether the browser took it.
+pub fn offer(name: &str, kind: &str, text: &str) -> bool {
+    try_offer(name, kind, text).is_some()
+}
+
+fn try_offer(name: &str, kind: &str, text: &str) -> Option<()> {
+    let document = web_sys::window()?.document()?;
+    let url = ObjectUrl::from(Blob::new_with_options(text, Some(kind)));
+    let link: HtmlAnchorElement = document.create_element("a").ok()?.dyn_into().ok()?;
+    link.set_href(&url);
+    link.set_download(name);
+    link.click();
+    // The browser reads the text a little later: keep it until then.
+    gloo_timers::callback::Timeout::new(10_000, move || drop(url)).forget();
+    Some(())
+}
+
+/// Reads the file picked in an input and says what to do with it. The reading ends when what is returned is dropped.
+pub fn read_picked(input: &HtmlInputElement, act: impl Fn(Action) + 'static) -> Option<FileReader> {
+    let file = gloo_file::File::from(input.files()?.get(0)?);
+    // The same file may be picked again.
+    input.set_value("");
+    let name = file.name();
+    if file.size() > MOST_BYTES as u64 {
+        act(Action::Say(Notice {
+            title: format!("{name} was not opened. The job on the page stays."),
+            lines: vec![format!(
+                "The file has {} bytes; a job has at most {}.",
+                fixed(file.size() as f64, 0),
+                fixed(MOST_BYTES as f64, 0)
+            )],
+        }));
+        return None;
+    }
+    Some(read_as_text(&file, move |text| match text {
+        Ok(text) => act(Action::Open(name.clone(), text)),
+        Err(why) => act(Action::Say(Notice {
+            title: format!("{name} could not be read. The job on the page stays."),
+            lines: vec![why.to_string()],
+        })),
+    }))
+}
+
+/// A file name for a job, from its title.
+#[must_use]
+pub fn file_name(title: &str, ending: &str) -> String {
+    let plain = |c: char| if c.is_alphanumeric() { c.to_ascii_lowercase() } else { '-' };
+    let words: String = title.chars().take(60).map(plain).collect();
+    let parts: Vec<&str> = words.split('-').filter(|w| !w.is_empty()).collect();
+    let stem = if parts.is_empty() { "propeller".into() } else { parts.join("-") };
+    format!("{stem}.{ending}")
+}
+
+#[cfg(test)]
+mod tests {
+    use super::file_name;
+
+    #[test]
+    fn a_file_is_named_after_the_job() {
+        assert_eq!(
+            file_name("Fenlark, 58 kW direct drive (invented)", "json"),
+            "fenlark-58-kw-direct-drive-invented.json"
+        );
+        assert_eq!(file_name("///", "html"), "propeller.html");
+    }
+}

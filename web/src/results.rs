@@ -1,0 +1,175 @@
+//! What is computed for the page, kept by the part of the job it depends on, so that an edit works out again only what it
+//! changed. The title, the wood and other flight points do not touch a point's results.
+
+use std::rc::Rc;
+
+use spokeshave::drawn::{DrawnStation, stations};
+use spokeshave::job::{FlightPoint, Job};
+use spokeshave::result::{PointResult, SectionPoint};
+use spokeshave::rig::Rig;
+use spokeshave::rotor::{CurvePoint, DepartureMap};
+
+/// Speeds and radii of the departure map.
+const MAP_SPEEDS: u32 = 60;
+const MAP_RADII: u32 = 40;
+/// Steps of the coefficient curves.
+const CURVE_STEPS: u32 = 40;
+/// Results kept for each kind.
+const KEPT: usize = 64;
+
+/// Results by what they depend on, the latest last.
+#[derive(Debug)]
+struct Shelf<K, V>(Vec<(K, Rc<V>)>);
+
+impl<K, V> Default for Shelf<K, V> {
+    fn default() -> Self {
+        Self(Vec::new())
+    }
+}
+
+impl<K: PartialEq + Clone, V> Shelf<K, V> {
+    fn get(&mut self, key: &K, make: impl FnOnce() -> V) -> Rc<V> {
+        if let Some((_, value)) = self.0.iter().find(|(k, _)| k == key) {
+            return value.clone();
+        }
+        if self.0.len() >= KEPT {
+            self.0.remove(0);
+        }
+        let value = Rc::new(make());
+        self.0.push((key.clone(), value.clone()));
+        value
+    }
+}
+
+/// The results of one propeller.
+#[derive(Debug, Default)]
+pub struct Results {
+    rig: Option<Rc<Rig>>,
+    drawn: Rc<Vec<DrawnStation>>,
+    points: Shelf<FlightPoint, Option<PointResult>>,
+    maps: Shelf<FlightPoint, Option<DepartureMap>>,
+    curves: Shelf<FlightPoint, Vec<CurvePoint>>,
+    sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
+}
+
+impl Results {
+    /// Makes ready for a job; drops what the job no longer agrees with. Jobs that cannot be built leave nothing.
+    pub fn of(&mut self, job: &Job) -> &mut Self {
+        match &self.rig {
+            Some(rig) if rig.job == *job => {}
+            Some(rig) if same_machine(&rig.job, job) => {
+                self.rig = Some(Rc::new(Rig { job: job.clone(), ..Rig::clone(rig) }));
+            }
+            _ => *self = Self::built(job),
+        }
+        self
+    }
+
+    fn built(job: &Job) -> Self {
+        let rig = Rig::new(job).ok().map(Rc::new);
+        let reference = job.propeller.angle_reference;
+        let drawn = rig.as_ref().map_or_else(Vec::new, |rig| stations(&rig.rotor.blade, reference));
+        Self { rig, drawn: Rc::new(drawn), ..Self::default() }
+    }
+
+    /// The job made ready.
+    #[must_use]
+    pub fn rig(&self) -> Option<Rc<Rig>> {
+        self.rig.clone()
+    }
+
+    /// The stations as drawn.
+    #[must_use]
+    pub fn drawn(&self) -> Rc<Vec<DrawnStation>> {
+        self.drawn.clone()
+    }
+
+    /// A flight point worked out.
+    pub fn point(&mut self, i: usize) -> Rc<Option<PointResult>> {
+        let Some((rig, key)) = self.at(i) else { return Rc::new(None) };
+        self.points.get(&key, || rig.point(i))
+    }
+
+    /// The departure map at a flight point.
+    pub fn map(&mut self, i: usize) -> Rc<Option<DepartureMap>> {
+        let Some((rig, key)) = self.at(i) else { return Rc::new(None) };
+        self.maps.get(&key, || rig.map(i, MAP_SPEEDS, MAP_RADII))
+    }
+
+    /// The coefficient curves at a flight point.
+    pub fn curves(&mut self, i: usize) -> Rc<Vec<CurvePoint>> {
+        let Some((rig, key)) = self.at(i) else { return Rc::default() };
+        self.curves.get(&key, || rig.curves(i, CURVE_STEPS))
+    }
+
+    /// Lift and drag of a station's section over angle at a flight point.
+    pub fn section(&mut self, i: usize, station: usize) -> Rc<Vec<SectionPoint>> {
+        let Some((rig, key)) = self.at(i) else { return Rc::default() };
+        self.sections.get(&(key, station), || rig.section_curve(i, station))
+    }
+
+    fn at(&self, i: usize) -> Option<(Rc<Rig>, FlightPoint)> {
+        let rig = self.rig.clone()?;
+        let key = rig.job.flight_points.get(i)?.clone();
+        Some((rig, key))
+    }
+}
+
+/// Whether two jobs give the same answers at the same flight point.
+fn same_machine(a: &Job, b: &Job) -> bool {
+    a.propeller == b.propeller
+        && a.method == b.method
+        && a.engine == b.engine
+        && a.aircraft == b.aircraft
+        && a.sections == b.sections
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use spokeshave::job::DEMOS;
+
+    fn demo() -> Job {
+        Job::from_json(DEMOS[0].json).unwrap()
+    }
+
+    #[test]
+    fn results_are_those_of_the_core() {
+        let job = demo();
+        let mut results = Results::default();
+        assert_eq!(*results.of(&job).point(2), Rig::new(&job).unwrap().point(2));
+        assert!(results.map(2).is_some());
+        assert_eq!(results.drawn().len(), job.propeller.stations.len());
+    }
+
+    #[test]
+    fn what_does_not_change_is_not_worked_out_again() {
+        let mut job = demo();
+        let mut results = Results::default();
+        let (point, map) = (results.of(&job).point(2), results.map(2));
+        job.title = "another".into();
+        job.flight_points[0].altitude_m = 500.0;
+        results.of(&job);
+        assert!(Rc::ptr_eq(&point, &results.point(2)));
+        assert!(Rc::ptr_eq(&map, &results.map(2)));
+        assert!(!Rc::ptr_eq(&results.point(0), &results.point(1)));
+    }
+
+    #[test]
+    fn what_changes_is_worked_out_again() {
+        let mut job = demo();
+        let mut results = Results::default();
+        let before = results.of(&job).point(2);
+        job.propeller.stations[5].angle_deg = Some(25.0);
+        let after = results.of(&job).point(2);
+        assert_ne!(before, after);
+        assert_eq!(*after, Rig::new(&job).unwrap().point(2));
+    }
+
+    #[test]
+    fn a_place_that_is_not_there_has_no_result() {
+        let mut results = Results::default();
+        assert!(results.of(&demo()).point(99).is_none());
+        assert!(results.curves(99).is_empty());
+    }
+}

@@ -1,0 +1,245 @@
+//! What is picked rather than typed, and what is added to or taken out of a job.
+
+use spokeshave::drawn::{measured_by, with_station};
+use spokeshave::job::{AngleReference, FlightPoint, Job, PitchControl, Problem, Rotation, Setting};
+
+/// A change that is picked from a few.
+#[derive(Clone, Debug, PartialEq)]
+pub enum Choice {
+    /// What blade angles are measured to; the blade stays as it is.
+    Reference(AngleReference),
+    /// Sense of rotation.
+    Rotation(Rotation),
+    /// How the blades turn in the hub.
+    PitchControl(ControlKind),
+    /// One section for every station.
+    SectionOfAll(String),
+    /// The section of a station.
+    Section(usize, String),
+    /// What the engine is set to at a flight point.
+    Setting(usize, SettingKind),
+    /// Whether Mach number changes lift and drag.
+    Compressibility(bool),
+    /// Whether rotation delays stall inboard.
+    StallDelay(bool),
+    /// Whether the hub takes load off the root.
+    HubLoss(bool),
+    /// A station more, halfway to the next one outward.
+    AddStation(usize),
+    /// A station less.
+    RemoveStation(usize),
+    /// A flight point more, a copy of one.
+    AddPoint(usize),
+    /// A flight point less.
+    RemovePoint(usize),
+}
+
+/// Ways the blades turn in the hub.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum ControlKind {
+    /// One piece.
+    Fixed,
+    /// Set on the ground.
+    GroundAdjustable,
+    /// A governor holds the rpm.
+    ConstantSpeed,
+}
+
+/// Kinds of setting at a flight point.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum SettingKind {
+    /// A propeller rpm.
+    Rpm,
+    /// A shaft power.
+    Power,
+    /// Full throttle.
+    FullThrottle,
+    /// A share of full throttle.
+    Throttle,
+    /// Thrust equals drag.
+    Level,
+}
+
+impl ControlKind {
+    /// Every kind, in the order shown.
+    pub const ALL: [Self; 3] = [Self::Fixed, Self::GroundAdjustable, Self::ConstantSpeed];
+
+    /// The kind a propeller has.
+    #[must_use]
+    pub fn of(control: &PitchControl) -> Self {
+        match control {
+            PitchControl::Fixed {} => Self::Fixed,
+            PitchControl::GroundAdjustable { .. } => Self::GroundAdjustable,
+            PitchControl::ConstantSpeed { .. } => Self::ConstantSpeed,
+        }
+    }
+
+    /// What it is called.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::Fixed => "fixed",
+            Self::GroundAdjustable => "set on the ground",
+            Self::ConstantSpeed => "constant speed",
+        }
+    }
+
+    fn started(self) -> PitchControl {
+        match self {
+            Self::Fixed => PitchControl::Fixed {},
+            Self::GroundAdjustable => PitchControl::GroundAdjustable { turn_deg: 0.0 },
+            Self::ConstantSpeed => {
+                PitchControl::ConstantSpeed { rpm: 2_400.0, turn_min_deg: -5.0, turn_max_deg: 20.0 }
+            }
+        }
+    }
+}
+
+impl SettingKind {
+    /// Every kind, in the order shown.
+    pub const ALL: [Self; 5] = [Self::Rpm, Self::Power, Self::FullThrottle, Self::Throttle, Self::Level];
+
+    /// The kind a setting is of.
+    #[must_use]
+    pub fn of(setting: &Setting) -> Self {
+        match setting {
+            Setting::Rpm { .. } => Self::Rpm,
+            Setting::Power { .. } => Self::Power,
+            Setting::FullThrottle {} => Self::FullThrottle,
+            Setting::Throttle { .. } => Self::Throttle,
+            Setting::Level {} => Self::Level,
+        }
+    }
+
+    /// What it is called.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::Rpm => "rpm",
+            Self::Power => "shaft power",
+            Self::FullThrottle => "full throttle",
+            Self::Throttle => "part throttle",
+            Self::Level => "level flight",
+        }
+    }
+
+    /// The setting with the figures the point runs at, where they are known.
+    fn started(self, rpm: Option<f64>, power_w: Option<f64>) -> Setting {
+        match self {
+            Self::Rpm => Setting::Rpm { rpm: rpm.map_or(2_500.0, |r| r.round().max(1.0)) },
+            Self::Power => Setting::Power { power_w: power_w.filter(|p| *p > 0.001).unwrap_or(10_000.0) },
+            Self::FullThrottle => Setting::FullThrottle {},
+            Self::Throttle => Setting::Throttle { fraction: 0.75 },
+            Self::Level => Setting::Level {},
+        }
+    }
+}
+
+/// What the flight point runs at, so that another kind of setting starts from there.
+#[derive(Clone, Copy, Debug, Default, PartialEq)]
+pub struct Running {
+    /// Propeller rpm.
+    pub rpm: Option<f64>,
+    /// Shaft power, W.
+    pub power_w: Option<f64>,
+}
+
+impl Choice {
+    /// What the step is called.
+    #[must_use]
+    pub fn name(&self, job: &Job) -> String {
+        let point = |i: &usize| job.flight_points.get(*i).map_or("", |p| p.name.as_str());
+        match self {
+            Self::Reference(_) => "what angles are measured to".into(),
+            Self::Rotation(_) => "rotation".into(),
+            Self::PitchControl(_) => "pitch control".into(),
+            Self::SectionOfAll(_) => "section".into(),
+            Self::Section(i, _) => format!("section at station {}", i + 1),
+            Self::Setting(i, _) => format!("setting of {}", point(i)),
+            Self::Compressibility(_) => "compressibility".into(),
+            Self::StallDelay(_) => "stall delay".into(),
+            Self::HubLoss(_) => "hub loss".into(),
+            Self::AddStation(i) => format!("add a station after {}", i + 1),
+            Self::RemoveStation(i) => format!("remove station {}", i + 1),
+            Self::AddPoint(_) => "add a flight point".into(),
+            Self::RemovePoint(i) => format!("remove {}", point(i)),
+        }
+    }
+
+    /// The job with the change.
+    ///
+    /// # Errors
+    /// Why it cannot be, with what is allowed.
+    pub fn made(&self, job: &Job, running: Running) -> Result<Job, String> {
+        let next = self.applied(job, running)?;
+        let problems = next.check();
+        if problems.is_empty() {
+            return Ok(next);
+        }
+        Err(problems.iter().take(3).map(Problem::to_string).collect::<Vec<_>>().join("; "))
+    }
+
+    fn applied(&self, job: &Job, running: Running) -> Result<Job, String> {
+        let mut next = job.clone();
+        let method = &mut next.method;
+        match self {
+            Self::Reference(to) => return reference(job, *to),
+            Self::Rotation(to) => next.propeller.rotation = *to,
+            Self::PitchControl(to) => next.propeller.pitch_control = to.started(),
+            Self::SectionOfAll(name) => {
+                next.propeller.stations.iter_mut().for_each(|s| s.section.clone_from(name));
+            }
+            Self::Section(i, name) => {
+                if let Some(station) = next.propeller.stations.get_mut(*i) {
+                    station.section.clone_from(name);
+                }
+            }
+            Self::Setting(i, to) => set(&mut next, *i, *to, running),
+            Self::Compressibility(on) => method.compressibility = *on,
+            Self::StallDelay(on) => method.stall_delay = *on,
+            Self::HubLoss(on) => method.hub_loss = *on,
+            Self::AddStation(after) => return more_stations(job, *after),
+            Self::RemoveStation(i) => {
+                remove(&mut next.propeller.stations, *i, 2, "A blade needs two stations.")?
+            }
+            Self::AddPoint(like) => add_point(&mut next, *like),
+            Self::RemovePoint(i) => remove(&mut next.flight_points, *i, 1, "A job needs one flight point.")?,
+        }
+        Ok(next)
+    }
+}
+
+fn reference(job: &Job, to: AngleReference) -> Result<Job, String> {
+    measured_by(job, to).ok_or_else(|| "A station's section has no flat face to lay a protractor on.".into())
+}
+
+fn more_stations(job: &Job, after: usize) -> Result<Job, String> {
+    let share = |i: usize| job.propeller.stations.get(i).map(|s| s.radius_fraction);
+    let inner = share(after).ok_or_else(|| "There is no such station.".to_string())?;
+    let middle = (inner + share(after + 1).unwrap_or(1.0)) / 2.0;
+    with_station(job, middle).ok_or_else(|| "There is no room for a station there.".into())
+}
+
+fn set(job: &mut Job, i: usize, to: SettingKind, running: Running) {
+    if let Some(point) = job.flight_points.get_mut(i) {
+        point.setting = to.started(running.rpm, running.power_w);
+        if to != SettingKind::FullThrottle && point.airspeed_m_s.is_none() {
+            point.airspeed_m_s = Some(0.0);
+        }
+    }
+}
+
+fn remove<T>(from: &mut Vec<T>, i: usize, fewest: usize, why: &str) -> Result<(), String> {
+    if from.len() <= fewest || i >= from.len() {
+        return Err(why.into());
+    }
+    from.remove(i);
+    Ok(())
+}
+
+fn add_point(job: &mut Job, like: usize) {
+    let Some(model) = job.flight_points.get(like).or(job.flight_points.first()) else { return };
+    let taken = |name: &str| job.flight_points.iter().any(|p| p.name == name);
+    let name = (1..).map(|n| format!("Point {n}")).find(|name| !taken(name)).unwrap_or_default();
+    job.flight_points.push(FlightPoint { name, ..model.clone() });
+}

@@ -1,0 +1,170 @@
+//! What a person typed: kept as typed, tried on a copy of the job, refused with what is allowed.
+
+use std::collections::BTreeMap;
+
+use spokeshave::drawn::DrawnStation;
+use spokeshave::job::{Job, Problem};
+
+use super::field::{Field, Measure, PointFigure};
+use crate::number;
+use crate::units::{Quantity, Units};
+
+/// A text that is not yet, or cannot be, part of the job.
+#[derive(Clone, Debug, Default, PartialEq)]
+pub struct Draft {
+    /// As typed.
+    pub text: String,
+    /// Why it was refused; `None` while it is still being typed.
+    pub message: Option<String>,
+}
+
+/// All drafts by field.
+pub type Drafts = BTreeMap<Field, Draft>;
+
+/// The text a box shows while nothing is typed: enough decimals to tell what is in the job, none that say nothing.
+#[must_use]
+pub fn shown_text(job: &Job, drawn: &[DrawnStation], units: Units, field: Field) -> String {
+    if let Some(text) = field.text(job) {
+        return text.to_string();
+    }
+    let quantity = field.quantity(job);
+    let Some(value) = field.value(job, drawn) else { return String::new() };
+    let given = field.is_given(job);
+    let fewest = if given { units.box_decimals(quantity) } else { units.decimals(quantity) };
+    let most = fewest + usize::from(quantity != Quantity::Count && given);
+    let mut text = number::plain(units.shown(quantity, value), most);
+    if most > fewest && text.ends_with('0') {
+        text.pop();
+    }
+    if text.ends_with('.') { text.trim_end_matches('.').into() } else { text }
+}
+
+/// Tries a typed text on a job.
+///
+/// # Errors
+/// What is wrong and what is allowed, in the unit shown.
+pub fn tried(
+    job: &Job,
+    drawn: &[DrawnStation],
+    units: Units,
+    field: Field,
+    text: &str,
+) -> Result<Job, String> {
+    if field.text(job).is_some() {
+        return tried_text(job, field, text);
+    }
+    if let Some(without) = without_airspeed(job, field, text) {
+        return Ok(without);
+    }
+    let quantity = field.quantity(job);
+    let value = number::read(units, quantity, text).map_err(|why| {
+        let example = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));
+        example.map_or_else(|| sentence(&why), |e| format!("{} It was {e}.", sentence(&why)))
+    })?;
+    if quantity == Quantity::Count && value.fract() != 0.0 {
+        return Err("A whole number is needed.".into());
+    }
+    written(job, units, field, value)
+}
+
+/// Full throttle without an airspeed means as fast as it goes, so there the box may be emptied.
+fn without_airspeed(job: &Job, field: Field, text: &str) -> Option<Job> {
+    let Field::Point(i, PointFigure::Airspeed) = field else { return None };
+    let mut next = job.clone();
+    next.flight_points.get_mut(i)?.airspeed_m_s = None;
+    (text.trim().is_empty() && next.check().is_empty()).then_some(next)
+}
+
+fn tried_text(job: &Job, field: Field, text: &str) -> Result<Job, String> {
+    let mut next = job.clone();
+    field.write_text(&mut next, text.trim());
+    match next.check().first() {
+        None => Ok(next),
+        Some(problem) => Err(format!(
+            "{}: allowed is {}.",
+            sentence(&problem.found).trim_end_matches('.'),
+            problem.allowed
+        )),
+    }
+}
+
+/// Writes an SI value on a copy of a job.
+///
+/// # Errors
+/// What is wrong and what is allowed, in the unit shown.
+pub fn written(job: &Job, units: Units, field: Field, value: f64) -> Result<Job, String> {
+    let mut next = job.clone();
+    if !field.write(&mut next, value) {
+        return Err("There is no place for this figure here.".into());
+    }
+    match next.check().first() {
+        None => Ok(next),
+        Some(problem) => Err(refusal(job, units, field, value, problem)),
+    }
+}
+
+/// What is allowed, in the unit shown.
+fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem) -> String {
+    if let Some(span) = radius_span(job, field) {
+        return span_words(units, Quantity::Length, span.0, span.1, "between its neighbours");
+    }
+    let own = problem.path == field.path(job);
+    match problem.span {
+        Some((low, high)) if own => {
+            let scale = match field {
+                Field::Station(i, Measure::Thickness) => chord_m(job, i),
+                _ => 1.0,
+            };
+            span_words(units, field.quantity(job), low * scale, high * scale, "")
+        }
+        _ => elsewhere(units, field, value, problem),
+    }
+}
+
+fn elsewhere(units: Units, field: Field, value: f64, problem: &Problem) -> String {
+    if let Field::Station(_, Measure::Chord) = field
+        && problem.path.ends_with("thickness_ratio")
+    {
+        let chord = number::with_unit(units, Quantity::Length, Some(value));
+        return format!("A chord of {chord} is too narrow for the thickness here. Make it thinner first.");
+    }
+    format!("Refused: {problem}.")
+}
+
+/// Between the stations next to it.
+fn radius_span(job: &Job, field: Field) -> Option<(f64, f64)> {
+    let Field::Station(i, Measure::Radius) = field else { return None };
+    let tip_m = job.propeller.diameter_m / 2.0;
+    let radius_m = |i: usize| job.propeller.stations.get(i).map(|s| s.radius_fraction * tip_m);
+    let low = i.checked_sub(1).and_then(radius_m).unwrap_or(0.0);
+    Some((low, radius_m(i + 1).unwrap_or(tip_m)))
+}
+
+fn chord_m(job: &Job, i: usize) -> f64 {
+    job.propeller.stations.get(i).map_or(1.0, |s| s.chord_m)
+}
+
+fn span_words(units: Units, quantity: Quantity, low: f64, high: f64, more: &str) -> String {
+    let text = |si: f64| {
+        let shown = units.shown(quantity, si);
+        let decimals = if quantity == Quantity::Count { 0 } else { decimals_of(shown) };
+        number::fixed(shown, decimals)
+    };
+    let unit = match units.symbol(quantity) {
+        "" => String::new(),
+        "°" => "°".into(),
+        unit => format!("\u{a0}{unit}"),
+    };
+    let more = if more.is_empty() { String::new() } else { format!(", {more}") };
+    format!("Allowed is {} to {}{unit}{more}.", text(low), text(high))
+}
+
+/// Enough decimals to tell a bound, none that say nothing.
+fn decimals_of(shown: f64) -> usize {
+    (0..4).find(|&d| (shown * 10f64.powi(d)).fract().abs() < 1e-6).unwrap_or(2).clamp(0, 3) as usize
+}
+
+fn sentence(why: &str) -> String {
+    let mut chars = why.chars();
+    chars.next().map_or_else(String::new, |first| format!("{}{}.", first.to_uppercase(), chars.as_str()))
+}

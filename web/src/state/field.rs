@@ -1,0 +1,337 @@
+//! The figures of a job that are typed into boxes: where each stands, what it measures, how it is read and written.
+
+use spokeshave::drawn::{DrawnStation, kept_angle_deg};
+use spokeshave::job::{AngleReference, Job, PitchControl, Setting, Station};
+
+use crate::units::Quantity;
+
+/// One figure of a job.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
+pub enum Field {
+    /// Title of the job; a text.
+    Title,
+    /// Number of blades.
+    Blades,
+    /// Diameter of the propeller.
+    Diameter,
+    /// Diameter of the hub.
+    Hub,
+    /// How far the blades are turned on the ground.
+    Turn,
+    /// Rpm the governor holds.
+    GovernedRpm,
+    /// Fine stop.
+    FineStop,
+    /// Coarse stop.
+    CoarseStop,
+    /// A measure of a station.
+    Station(usize, Measure),
+    /// A figure of a flight point.
+    Point(usize, PointFigure),
+    /// Elements of the integrals.
+    Elements,
+    /// Amplification at transition.
+    Amplification,
+}
+
+/// What is measured at a station.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
+pub enum Measure {
+    /// Radius.
+    Radius,
+    /// Chord.
+    Chord,
+    /// Greatest thickness.
+    Thickness,
+    /// Blade angle to the chord line.
+    Angle,
+    /// Blade angle on the flat face.
+    FaceAngle,
+    /// Geometric pitch.
+    Pitch,
+}
+
+/// A figure of a flight point.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
+pub enum PointFigure {
+    /// Its name; a text.
+    Name,
+    /// Pressure altitude.
+    Height,
+    /// Temperature offset.
+    Temperature,
+    /// Airspeed.
+    Airspeed,
+    /// The figure of its setting.
+    Setting,
+}
+
+impl Measure {
+    /// What it is called.
+    #[must_use]
+    pub fn name(self) -> &'static str {
+        match self {
+            Self::Radius => "radius",
+            Self::Chord => "chord",
+            Self::Thickness => "thickness",
+            Self::Angle => "blade angle",
+            Self::FaceAngle => "angle on the face",
+            Self::Pitch => "pitch",
+        }
+    }
+
+    /// The figure of a station as drawn.
+    #[must_use]
+    pub fn of(self, drawn: &DrawnStation) -> Option<f64> {
+        match self {
+            Self::Radius => Some(drawn.radius_m),
+            Self::Chord => Some(drawn.chord_m),
+            Self::Thickness => Some(drawn.thickness_m),
+            Self::Angle => Some(drawn.angle_deg),
+            Self::FaceAngle => drawn.face_angle_deg,
+            Self::Pitch => Some(drawn.pitch_m),
+        }
+    }
+}
+
+impl Field {
+    /// What it measures.
+    #[must_use]
+    pub fn quantity(self, job: &Job) -> Quantity {
+        match self {
+            Self::Blades | Self::Elements => Quantity::Count,
+            Self::Title | Self::Amplification | Self::Point(_, PointFigure::Name) => Quantity::Number,
+            Self::Diameter | Self::Hub => Quantity::Length,
+            Self::Turn | Self::FineStop | Self::CoarseStop => Quantity::Angle,
+            Self::GovernedRpm => Quantity::Rpm,
+            Self::Station(_, Measure::Angle | Measure::FaceAngle) => Quantity::Angle,
+            Self::Station(..) => Quantity::Length,
+            Self::Point(_, PointFigure::Height) => Quantity::Height,
+            Self::Point(_, PointFigure::Temperature) => Quantity::Temperature,
+            Self::Point(_, PointFigure::Airspeed) => Quantity::Speed,
+            Self::Point(i, PointFigure::Setting) => match job.flight_points.get(i).map(|p| &p.setting) {
+                Some(Setting::Power { .. }) => Quantity::Power,
+                Some(Setting::Throttle { .. }) => Quantity::Share,
+                _ => Quantity::Rpm,
+            },
+        }
+    }
+
+    /// What it is called, with its place, as in “Undo: chord at station 9”.
+    #[must_use]
+    pub fn name(self, job: &Job) -> String {
+        match self {
+            Self::Title => "title".into(),
+            Self::Blades => "number of blades".into(),
+            Self::Diameter => "diameter".into(),
+            Self::Hub => "hub diameter".into(),
+            Self::Turn => "blades turned".into(),
+            Self::GovernedRpm => "governed rpm".into(),
+            Self::FineStop => "fine stop".into(),
+            Self::CoarseStop => "coarse stop".into(),
+            Self::Station(i, measure) => format!("{} at station {}", measure.name(), i + 1),
+            Self::Point(i, figure) => {
+                let name = job.flight_points.get(i).map_or("", |p| p.name.as_str());
+                format!("{} of {name}", figure.name())
+            }
+            Self::Elements => "number of elements".into(),
+            Self::Amplification => "amplification at transition".into(),
+        }
+    }
+
+    /// The name its path in the job file ends with, to tell its own problems from others'.
+    #[must_use]
+    pub fn path(self, job: &Job) -> String {
+        match self {
+            Self::Title => "title".into(),
+            Self::Blades => "propeller.blades".into(),
+            Self::Diameter => "propeller.diameter_m".into(),
+            Self::Hub => "propeller.hub_diameter_m".into(),
+            Self::Turn => "propeller.pitch_control.turn_deg".into(),
+            Self::GovernedRpm => "propeller.pitch_control.rpm".into(),
+            Self::FineStop => "propeller.pitch_control.turn_min_deg".into(),
+            Self::CoarseStop => "propeller.pitch_control.turn_max_deg".into(),
+            Self::Station(i, measure) => format!("propeller.stations[{i}].{}", measure.key()),
+            Self::Point(i, figure) => format!("flight_points[{i}].{}", figure.key(job, i)),
+            Self::Elements => "method.elements".into(),
+            Self::Amplification => "method.n_crit".into(),
+        }
+    }
+
+    /// Reads the figure out of a job, SI. Measures of a station come from the blade as drawn.
+    #[must_use]
+    pub fn value(self, job: &Job, drawn: &[DrawnStation]) -> Option<f64> {
+        let p = &job.propeller;
+        match (self, &p.pitch_control) {
+            (Self::Blades, _) => Some(f64::from(p.blades)),
+            (Self::Diameter, _) => Some(p.diameter_m),
+            (Self::Hub, _) => Some(p.hub_diameter_m),
+            (Self::Turn, PitchControl::GroundAdjustable { turn_deg }) => Some(*turn_deg),
+            (Self::GovernedRpm, PitchControl::ConstantSpeed { rpm, .. }) => Some(*rpm),
+            (Self::FineStop, PitchControl::ConstantSpeed { turn_min_deg, .. }) => Some(*turn_min_deg),
+            (Self::CoarseStop, PitchControl::ConstantSpeed { turn_max_deg, .. }) => Some(*turn_max_deg),
+            (Self::Station(i, measure), _) => drawn.get(i).and_then(|d| measure.of(d)),
+            (Self::Point(i, figure), _) => figure.value(job, i),
+            (Self::Elements, _) => Some(f64::from(job.method.elements)),
+            (Self::Amplification, _) => Some(job.method.n_crit),
+            _ => None,
+        }
+    }
+
+    /// Whether the job file holds this very figure; else it follows from another one.
+    #[must_use]
+    pub fn is_given(self, job: &Job) -> bool {
+        let Self::Station(i, measure) = self else { return true };
+        let by_pitch = job.propeller.stations.get(i).is_some_and(|s| s.pitch_m.is_some());
+        match measure {
+            Measure::Radius | Measure::Chord | Measure::Thickness => true,
+            Measure::Pitch => by_pitch,
+            Measure::Angle => !by_pitch && job.propeller.angle_reference == AngleReference::ChordLine,
+            Measure::FaceAngle => !by_pitch && job.propeller.angle_reference == AngleReference::FlatFace,
+        }
+    }
+
+    /// The text, where the field is one.
+    #[must_use]
+    pub fn text(self, job: &Job) -> Option<&str> {
+        match self {
+            Self::Title => Some(&job.title),
+            Self::Point(i, PointFigure::Name) => job.flight_points.get(i).map(|p| p.name.as_str()),
+            _ => None,
+        }
+    }
+
+    /// Writes a text into a job; whether the field is one.
+    pub fn write_text(self, job: &mut Job, text: &str) -> bool {
+        let place = match self {
+            Self::Title => Some(&mut job.title),
+            Self::Point(i, PointFigure::Name) => job.flight_points.get_mut(i).map(|p| &mut p.name),
+            _ => None,
+        };
+        place.map(|place| text.clone_into(place)).is_some()
+    }
+
+    /// Writes the figure, SI, into a job; whether there was a place for it. What is allowed is for [`Job::check`] to say.
+    pub fn write(self, job: &mut Job, value: f64) -> bool {
+        let p = &mut job.propeller;
+        match (self, &mut p.pitch_control) {
+            (Self::Blades, _) => p.blades = whole(value),
+            (Self::Diameter, _) => p.diameter_m = value,
+            (Self::Hub, _) => p.hub_diameter_m = value,
+            (Self::Turn, PitchControl::GroundAdjustable { turn_deg }) => *turn_deg = value,
+            (Self::GovernedRpm, PitchControl::ConstantSpeed { rpm, .. }) => *rpm = value,
+            (Self::FineStop, PitchControl::ConstantSpeed { turn_min_deg, .. }) => *turn_min_deg = value,
+            (Self::CoarseStop, PitchControl::ConstantSpeed { turn_max_deg, .. }) => *turn_max_deg = value,
+            (Self::Station(i, measure), _) => return write_station(job, i, measure, value),
+            (Self::Point(i, figure), _) => return figure.write(job, i, value),
+            (Self::Elements, _) => job.method.elements = whole(value),
+            (Self::Amplification, _) => job.method.n_crit = value,
+            _ => return false,
+        }
+        true
+    }
+}
+
+impl Measure {
+    fn key(self) -> &'static str {
+        match self {
+            Self::Radius => "radius_fraction",
+            Self::Chord => "chord_m",
+            Self::Thickness => "thickness_ratio",
+            Self::Angle | Self::FaceAngle => "angle_deg",
+            Self::Pitch => "pitch_m",
+        }
+    }
+}
+
+impl PointFigure {
+    /// What it is called.
+    #[must_use]
+    pub fn name(self) -> &'static str {
+        match self {
+            Self::Name => "name",
+            Self::Height => "height",
+            Self::Temperature => "temperature offset",
+            Self::Airspeed => "airspeed",
+            Self::Setting => "setting",
+        }
+    }
+
+    fn key(self, job: &Job, i: usize) -> &'static str {
+        match self {
+            Self::Name => "name",
+            Self::Height => "altitude_m",
+            Self::Temperature => "isa_offset_k",
+            Self::Airspeed => "airspeed_m_s",
+            Self::Setting => match job.flight_points.get(i).map(|p| &p.setting) {
+                Some(Setting::Power { .. }) => "setting.power_w",
+                Some(Setting::Throttle { .. }) => "setting.fraction",
+                _ => "setting.rpm",
+            },
+        }
+    }
+
+    fn value(self, job: &Job, i: usize) -> Option<f64> {
+        let point = job.flight_points.get(i)?;
+        match self {
+            Self::Name => None,
+            Self::Height => Some(point.altitude_m),
+            Self::Temperature => Some(point.isa_offset_k),
+            Self::Airspeed => point.airspeed_m_s,
+            Self::Setting => match point.setting {
+                Setting::Rpm { rpm } => Some(rpm),
+                Setting::Power { power_w } => Some(power_w),
+                Setting::Throttle { fraction } => Some(fraction),
+                Setting::FullThrottle {} | Setting::Level {} => None,
+            },
+        }
+    }
+
+    fn write(self, job: &mut Job, i: usize, value: f64) -> bool {
+        let Some(point) = job.flight_points.get_mut(i) else { return false };
+        match (self, &mut point.setting) {
+            (Self::Height, _) => point.altitude_m = value,
+            (Self::Temperature, _) => point.isa_offset_k = value,
+            (Self::Airspeed, _) => point.airspeed_m_s = Some(value),
+            (Self::Setting, Setting::Rpm { rpm }) => *rpm = value,
+            (Self::Setting, Setting::Power { power_w }) => *power_w = value,
+            (Self::Setting, Setting::Throttle { fraction }) => *fraction = value,
+            (Self::Name, _) | (Self::Setting, Setting::FullThrottle {} | Setting::Level {}) => return false,
+        }
+        true
+    }
+}
+
+/// A whole number; 0, which nothing allows, for what is none.
+fn whole(value: f64) -> u32 {
+    if value.fract() == 0.0 && (0.0..=1e6).contains(&value) { value as u32 } else { 0 }
+}
+
+fn write_station(job: &mut Job, i: usize, measure: Measure, value: f64) -> bool {
+    let tip_m = job.propeller.diameter_m / 2.0;
+    let kept_deg = match measure {
+        Measure::Angle => kept_angle_deg(job, i, AngleReference::ChordLine, value),
+        Measure::FaceAngle => kept_angle_deg(job, i, AngleReference::FlatFace, value),
+        _ => None,
+    };
+    let Some(station) = job.propeller.stations.get_mut(i) else { return false };
+    match measure {
+        Measure::Radius => station.radius_fraction = value / tip_m,
+        Measure::Chord => write_chord(station, value),
+        Measure::Thickness => station.thickness_ratio = value / station.chord_m,
+        Measure::Pitch => (station.angle_deg, station.pitch_m) = (None, Some(value)),
+        Measure::Angle | Measure::FaceAngle => {
+            if kept_deg.is_none() {
+                return false;
+            }
+            (station.angle_deg, station.pitch_m) = (kept_deg, None);
+        }
+    }
+    true
+}
+
+/// The thickness in millimetres stays: one entry changes one measure of the wood.
+fn write_chord(station: &mut Station, chord_m: f64) {
+    station.thickness_ratio *= station.chord_m / chord_m;
+    station.chord_m = chord_m;
+}

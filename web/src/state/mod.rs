@@ -1,0 +1,364 @@
+//! The page's state and the one reducer that changes it. Nothing here touches the browser: texts and events come in as
+//! actions, and what has to be stored or computed is read off the state that comes out.
+
+mod choice;
+mod drag;
+mod entry;
+mod field;
+mod history;
+#[cfg(test)]
+mod tests;
+
+use std::rc::Rc;
+
+use spokeshave::job::{DEMOS, Job, JobError};
+
+pub use choice::{Choice, ControlKind, Running, SettingKind};
+pub use drag::{Drag, drawn, follows};
+pub use entry::{Draft, Drafts, shown_text};
+pub use field::{Field, Measure, PointFigure};
+pub use history::History;
+
+use crate::units::Units;
+
+/// A job to start from: a plain two-blade propeller of one pitch.
+pub const BLANK: &str = include_str!("blank.json");
+
+/// Colours of the page.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq, serde::Serialize, serde::Deserialize)]
+pub enum Theme {
+    /// As the device says.
+    #[default]
+    Auto,
+    /// Light.
+    Light,
+    /// Dark.
+    Dark,
+}
+
+/// Something the page has to say.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Notice {
+    /// What happened.
+    pub title: String,
+    /// Where, what, what is allowed; one line each.
+    pub lines: Vec<String>,
+}
+
+/// The state of the page.
+#[derive(Clone, Debug)]
+pub struct State {
+    /// The job, its past and its future.
+    pub history: History,
+    /// Flight point selected.
+    pub point: usize,
+    /// Station selected.
+    pub station: usize,
+    /// Texts that are not part of the job.
+    pub drafts: Drafts,
+    /// A drag that has begun.
+    pub drag: Option<Drag>,
+    /// Stations on either side that follow a drag.
+    pub follow: usize,
+    /// Units shown.
+    pub units: Units,
+    /// Whether the user picked the units.
+    pub units_picked: bool,
+    /// Colours.
+    pub theme: Theme,
+    /// Something to say.
+    pub notice: Option<Notice>,
+}
+
+/// What can happen.
+#[derive(Clone, Debug)]
+pub enum Action {
+    /// A text is being typed into a box.
+    Type(Field, String),
+    /// The text in a box is meant.
+    Commit(Field),
+    /// The text in a box is given up.
+    GiveUp(Field),
+    /// Something was picked, added or removed.
+    Choose(Choice, Running),
+    /// A flight point was selected.
+    SelectPoint(usize),
+    /// A station was selected.
+    SelectStation(usize),
+    /// One station outward.
+    Outward,
+    /// One station inward.
+    Inward,
+    /// A ring was taken.
+    Take(usize, Measure),
+    /// The ring taken is here, SI.
+    DragTo(f64),
+    /// The ring was let go.
+    LetGo,
+    /// The ring goes back.
+    PutBack,
+    /// A ring was moved by a key to here, SI.
+    Nudge(usize, Measure, f64),
+    /// The run of key presses is over.
+    EndRun,
+    /// So many stations on either side follow.
+    Follow(usize),
+    /// The latest step is taken back.
+    Undo,
+    /// The step taken back is taken again.
+    Redo,
+    /// A job file was read: its name and text.
+    Open(String, String),
+    /// A job that comes with the program.
+    Demo(usize),
+    /// A plain job to start from.
+    Blank,
+    /// Units were picked.
+    Units(Units),
+    /// Colours were picked.
+    Theme(Theme),
+    /// Something has to be said.
+    Say(Notice),
+    /// What was said has been read.
+    Dismiss,
+}
+
+impl State {
+    /// The state with a job.
+    #[must_use]
+    pub fn new(job: Job) -> Self {
+        let units = Units::suiting(job.propeller.diameter_m);
+        let (point, station) = places(&job);
+        Self {
+            history: History::new(job),
+            point,
+            station,
+            drafts: Drafts::new(),
+            drag: None,
+            follow: 1,
+            units,
+            units_picked: false,
+            theme: Theme::default(),
+            notice: None,
+        }
+    }
+
+    /// The state to start with: the job found, else the first example. A job that cannot be read is said.
+    #[must_use]
+    pub fn started(found: Option<&str>) -> Self {
+        match found.map(Job::from_json) {
+            Some(Ok(job)) => Self::new(job),
+            Some(Err(error)) => {
+                let title = "The job kept here cannot be read. It was put aside; an example is shown.";
+                Self { notice: Some(refused(title, &error)), ..Self::new(example()) }
+            }
+            None => Self::new(example()),
+        }
+    }
+
+    /// The job.
+    #[must_use]
+    pub fn job(&self) -> &Rc<Job> {
+        self.history.job()
+    }
+
+    /// The state after an action.
+    #[must_use]
+    pub fn after(&self, action: Action) -> Self {
+        let mut next = self.clone();
+        next.act(action);
+        next.keep_places();
+        next
+    }
+
+    fn act(&mut self, action: Action) {
+        match action {
+            Action::Type(..) | Action::Commit(_) | Action::GiveUp(_) => self.enter(action),
+            Action::Choose(choice, running) => self.choose(&choice, running),
+            Action::SelectPoint(i) => self.point = i,
+            Action::SelectStation(i) => self.station = i,
+            Action::Outward => self.station += 1,
+            Action::Inward => self.station = self.station.saturating_sub(1),
+            Action::Take(..)
+            | Action::DragTo(_)
+            | Action::LetGo
+            | Action::PutBack
+            | Action::Nudge(..)
+            | Action::EndRun => self.drag(action),
+            Action::Follow(span) => self.follow = span.min(5),
+            Action::Undo | Action::Redo => self.turn_back(matches!(action, Action::Undo)),
+            Action::Open(name, text) => self.open(&name, &text),
+            Action::Demo(i) => self.start_from(DEMOS.get(i).map_or(BLANK, |d| d.json), "open an example"),
+            Action::Blank => self.start_from(BLANK, "start a new job"),
+            Action::Units(units) => (self.units, self.units_picked) = (units, true),
+            Action::Theme(theme) => self.theme = theme,
+            Action::Say(notice) => self.notice = Some(notice),
+            Action::Dismiss => self.notice = None,
+        }
+    }
+
+    fn enter(&mut self, action: Action) {
+        match action {
+            Action::Type(field, text) => {
+                self.drafts.insert(field, Draft { text, message: None });
+            }
+            Action::Commit(field) => self.commit(field),
+            Action::GiveUp(field) => {
+                self.drafts.remove(&field);
+            }
+            _ => {}
+        }
+    }
+
+    fn commit(&mut self, field: Field) {
+        let Some(draft) = self.drafts.get_mut(&field) else { return };
+        let (job, drawn) = (self.history.job(), drawn(self.history.job()));
+        if draft.text == shown_text(job, &drawn, self.units, field) {
+            self.drafts.remove(&field);
+            return;
+        }
+        match entry::tried(job, &drawn, self.units, field, &draft.text) {
+            Ok(next) => {
+                let name = field.name(job);
+                self.drafts.remove(&field);
+                self.history.step(name, next);
+            }
+            Err(message) => draft.message = Some(message),
+        }
+    }
+
+    fn choose(&mut self, choice: &Choice, running: Running) {
+        match choice.made(self.job(), running) {
+            Ok(next) => {
+                let name = choice.name(self.job());
+                self.history.step(name, next);
+                self.follow_choice(choice);
+            }
+            Err(why) => self.notice = Some(Notice { title: "Nothing was changed.".into(), lines: vec![why] }),
+        }
+    }
+
+    /// What is selected goes along with what was added or removed; texts that belong to other places go.
+    fn follow_choice(&mut self, choice: &Choice) {
+        match choice {
+            Choice::AddStation(after) => self.station = after + 1,
+            Choice::RemoveStation(i) if self.station > *i => self.station -= 1,
+            Choice::AddPoint(_) => self.point = self.job().flight_points.len() - 1,
+            Choice::RemovePoint(i) if self.point > *i => self.point -= 1,
+            Choice::RemoveStation(_) | Choice::RemovePoint(_) => {}
+            _ => return,
+        }
+        self.drafts.clear();
+    }
+
+    fn drag(&mut self, action: Action) {
+        match action {
+            Action::Take(station, measure) => {
+                self.station = station;
+                self.drag = Some(Drag { station, measure, start: self.job().clone() });
+            }
+            Action::DragTo(value) => self.drag_to(value),
+            Action::LetGo => self.let_go(),
+            Action::PutBack => {
+                if let Some(drag) = self.drag.take() {
+                    self.history.show(drag.start);
+                }
+            }
+            Action::Nudge(station, measure, value) => self.nudge(station, measure, value),
+            _ => self.history.end_run(),
+        }
+    }
+
+    fn drag_to(&mut self, value: f64) {
+        let Some(drag) = &self.drag else { return };
+        if let Some(job) = drag::dragged(&drag.start, drag.station, drag.measure, value, self.follow) {
+            self.history.show(Rc::new(job));
+        }
+    }
+
+    fn let_go(&mut self) {
+        let Some(drag) = self.drag.take() else { return };
+        let job = self.job().clone();
+        self.history.show(drag.start);
+        let name = Field::Station(drag.station, drag.measure).name(&job);
+        self.history.step(name, Rc::unwrap_or_clone(job));
+        self.drafts.clear();
+    }
+
+    fn nudge(&mut self, station: usize, measure: Measure, value: f64) {
+        self.station = station;
+        if let Some(job) = drag::dragged(self.job(), station, measure, value, self.follow) {
+            let field = Field::Station(station, measure);
+            let name = field.name(&job);
+            self.history.small_step(name, job, field);
+        }
+    }
+
+    fn turn_back(&mut self, back: bool) {
+        self.drag = None;
+        self.drafts.clear();
+        if back {
+            self.history.undo();
+        } else {
+            self.history.redo();
+        }
+    }
+
+    fn open(&mut self, name: &str, text: &str) {
+        match Job::from_json(text) {
+            Ok(job) => self.show_new(job, format!("open {name}")),
+            Err(error) => {
+                self.notice =
+                    Some(refused(&format!("{name} was not opened. The job on the page stays."), &error));
+            }
+        }
+    }
+
+    fn start_from(&mut self, json: &str, step: &str) {
+        if let Ok(job) = Job::from_json(json) {
+            self.show_new(job, step.into());
+        }
+    }
+
+    /// Another job; the one before can be had back by undoing.
+    fn show_new(&mut self, job: Job, step: String) {
+        if !self.units_picked {
+            self.units = Units::suiting(job.propeller.diameter_m);
+        }
+        (self.point, self.station) = places(&job);
+        self.history.step(step, job);
+        (self.drag, self.notice) = (None, None);
+        self.drafts.clear();
+    }
+
+    fn keep_places(&mut self) {
+        let job = self.history.job();
+        self.point = self.point.min(job.flight_points.len().saturating_sub(1));
+        self.station = self.station.min(job.propeller.stations.len().saturating_sub(1));
+    }
+}
+
+/// The example to start with.
+fn example() -> Job {
+    // A test of the core reads every example, and one below reads the plain job.
+    Job::from_json(DEMOS[0].json).expect("the examples are valid jobs")
+}
+
+/// The flight point and the station shown first: the cruise, if one is called so, and the station nearest to three
+/// quarters of the radius.
+fn places(job: &Job) -> (usize, usize) {
+    let off = |f: f64| (f - 0.75).abs();
+    let stations = job.propeller.stations.iter().enumerate();
+    let near = stations.min_by(|a, b| off(a.1.radius_fraction).total_cmp(&off(b.1.radius_fraction)));
+    let cruise = job.flight_points.iter().position(|p| p.name.to_lowercase().contains("cruise"));
+    (cruise.unwrap_or(0), near.map_or(0, |(i, _)| i))
+}
+
+/// A job that was refused, by path.
+fn refused(title: &str, error: &JobError) -> Notice {
+    let lines = match error {
+        JobError::Values(problems) => problems.iter().take(8).map(ToString::to_string).collect(),
+        other => vec![other.to_string()],
+    };
+    Notice { title: title.into(), lines }
+}

@@ -1,0 +1,26 @@
+//! The usual cautions.
+
+use yew::prelude::*;
+
+/// Before a standing start is tried.
+pub fn standing_start() -> Html {
+    html! {
+        <aside class="caution">
+            <b>{ "Before you act. " }</b>
+            { "A standing start is an estimate. Chock and tie the aircraft down, keep out of the disc plane, and run up only \
+               what has been inspected and balanced. The engine maker's rpm limit comes before any figure here." }
+        </aside>
+    }
+}
+
+/// At the foot of the page.
+pub fn foot() -> Html {
+    html! {
+        <p>
+            <b>{ "Estimates, not an approval. " }</b>
+            { "Leave margin and test. Wood varies: inspect, proof-load and balance every blade, and check hub bolts again as \
+               the wood moves. Nobody stands in the plane of the disc. The rules of your aviation authority, the engine \
+               maker's limits and a licensed inspector or engineer come first." }
+        </p>
+    }
+}

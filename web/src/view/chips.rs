@@ -1,0 +1,118 @@
+//! The flight points as a group of radio buttons.
+
+use spokeshave::job::{FlightPoint, Setting};
+use spokeshave::result::{PointResult, State as Answer};
+use wasm_bindgen::JsCast;
+use web_sys::{HtmlElement, js_sys};
+use yew::prelude::*;
+
+use super::{Seen, use_act};
+use crate::number::with_unit;
+use crate::state::Action;
+use crate::units::{Quantity, Units};
+
+/// Properties of [`Chips`].
+#[derive(Properties, PartialEq)]
+pub struct ChipsProps {
+    /// The state.
+    pub state: Seen,
+}
+
+/// The flight points; arrows go from one to the next.
+#[component]
+pub fn Chips(props: &ChipsProps) -> Html {
+    let act = use_act();
+    let (state, job) = (&props.state, props.state.job());
+    let (now, count) = (state.point, job.flight_points.len());
+    let onkeydown = {
+        let act = act.clone();
+        Callback::from(move |e: KeyboardEvent| {
+            let to = match e.key().as_str() {
+                "ArrowRight" | "ArrowDown" => (now + 1) % count,
+                "ArrowLeft" | "ArrowUp" => (now + count - 1) % count,
+                _ => return,
+            };
+            e.prevent_default();
+            act.send(Action::SelectPoint(to));
+            focus_sibling(&e, to);
+        })
+    };
+    let chips = job.flight_points.iter().enumerate().map(|(i, point)| {
+        let on = i == now;
+        html! {
+            <button type="button" class="chip" role="radio" aria-checked={if on { "true" } else { "false" }}
+                tabindex={if on { "0" } else { "-1" }} onclick={act.on(move |_: MouseEvent| Action::SelectPoint(i))}>
+                <b>{ &point.name }</b><span>{ speed_words(state.units, point) }</span>
+            </button>
+        }
+    });
+    html! { <div class="chips" role="radiogroup" aria-label="Flight point" {onkeydown}>{ for chips }</div> }
+}
+
+fn speed_words(units: Units, point: &FlightPoint) -> String {
+    point
+        .airspeed_m_s
+        .map_or_else(|| "as fast as it goes".into(), |v| with_unit(units, Quantity::Speed, Some(v)))
+}
+
+fn focus_sibling(event: &KeyboardEvent, to: usize) {
+    let group = event.current_target().and_then(|t| t.dyn_into::<web_sys::Element>().ok());
+    let chip = group.and_then(|g| g.children().item(u32::try_from(to).unwrap_or(0)));
+    if let Some(chip) = chip.and_then(|c| c.dyn_into::<HtmlElement>().ok()) {
+        // Fails only for an element that is gone.
+        let _: Result<(), js_sys::wasm_bindgen::JsValue> = chip.focus();
+    }
+}
+
+/// The flight point in a sentence: its setting, height and what comes of it, or why there is no answer.
+#[must_use]
+pub fn sentence(units: Units, point: &FlightPoint, result: Option<&PointResult>) -> String {
+    match result {
+        Some(r) if r.state != Answer::Ok => r.state.sentence().to_string(),
+        _ => format!("{}{}, {}", setting_words(units, point), air_words(units, point), rpm_words(result)),
+    }
+}
+
+fn setting_words(units: Units, point: &FlightPoint) -> String {
+    match point.setting {
+        Setting::Rpm { .. } => "Rpm as set".into(),
+        Setting::Power { power_w } => format!("At {}", with_unit(units, Quantity::Power, Some(power_w))),
+        Setting::FullThrottle {} => "Full throttle".into(),
+        Setting::Level {} => "Level".into(),
+        Setting::Throttle { fraction } => {
+            format!("{} throttle", with_unit(units, Quantity::Share, Some(fraction)))
+        }
+    }
+}
+
+fn air_words(units: Units, point: &FlightPoint) -> String {
+    let height = if point.altitude_m == 0.0 {
+        " at sea level".into()
+    } else {
+        format!(" at {}", with_unit(units, Quantity::Height, Some(point.altitude_m)))
+    };
+    if point.isa_offset_k == 0.0 {
+        return height;
+    }
+    format!("{height}, {} K off standard", crate::number::signed(point.isa_offset_k, 0))
+}
+
+fn rpm_words(result: Option<&PointResult>) -> String {
+    with_unit(Units::default(), Quantity::Rpm, result.and_then(|r| r.rpm))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use spokeshave::job::{DEMOS, Job};
+    use spokeshave::rig::Rig;
+
+    #[test]
+    fn a_point_is_said_in_a_sentence() {
+        let job = Job::from_json(DEMOS[0].json).unwrap();
+        let result = Rig::new(&job).unwrap().point(2);
+        let said = sentence(Units::default(), &job.flight_points[2], result.as_ref());
+        let said = said.replace(['\u{a0}', '\u{202f}'], " ");
+        assert!(said.starts_with("Level at 600 m, 2 ") && said.ends_with(" rpm"), "{said}");
+    }
+}

@@ -1,0 +1,125 @@
+//! How it is computed: the switches of the method, the tables used and where they come from, what lies outside them.
+
+use std::rc::Rc;
+
+use spokeshave::result::{Note, PointResult};
+use spokeshave::section::Family;
+use yew::prelude::*;
+
+use super::form::{Labelled, Shown, Switch};
+use super::{Seen, use_act};
+use crate::app::RigRef;
+use crate::number::{fixed, significant};
+use crate::state::{Action, Choice, Field, Running};
+
+/// Properties of [`MethodPanel`].
+#[derive(Properties, PartialEq)]
+pub struct MethodPanelProps {
+    /// The state.
+    pub state: Seen,
+    /// The job made ready.
+    pub rig: Option<RigRef>,
+    /// The flight point selected, worked out.
+    pub point: Rc<Option<PointResult>>,
+}
+
+/// What the panel holds.
+#[component]
+pub fn MethodPanel(props: &MethodPanelProps) -> Html {
+    let families = props.rig.iter().flat_map(|rig| rig.0.rotor.blade.families.iter());
+    let families = families.map(|f| html! { <li key={f.about.name.clone()}>{ family(f) }</li> });
+    html! {
+        <div class="method">
+            <div>
+                <h3>{ "Method" }</h3>
+                <p class="note">
+                    { "Blade-element momentum with Prandtl's loss at tip and hub, solved for every element by bracketing. \
+                       It leaves out yawed flow, blade sweep, bending and twist under load, and how one blade's wake meets \
+                       the fuselage. Air is the ISO standard atmosphere with an offset." }
+                </p>
+                <Switches state={props.state.clone()} />
+            </div>
+            <div>
+                <h3>{ "Section tables used" }</h3>
+                <ul class="families">{ for families }</ul>
+                <Outside point={props.point.clone()} />
+            </div>
+        </div>
+    }
+}
+
+#[derive(Properties, PartialEq)]
+struct SwitchesProps {
+    state: Seen,
+}
+
+#[component]
+fn Switches(props: &SwitchesProps) -> Html {
+    let act = use_act();
+    let (state, method) = (&props.state, &props.state.job().method);
+    let switch = |label: &'static str, on: bool, choice: fn(bool) -> Choice| {
+        let onswitch = act.on(move |on: bool| Action::Choose(choice(on), Running::default()));
+        html! { <Switch {label} {on} {onswitch} /> }
+    };
+    html! {
+        <div class="switches">
+            { switch("Mach number changes lift and drag", method.compressibility, Choice::Compressibility) }
+            { switch("Rotation delays stall inboard", method.stall_delay, Choice::StallDelay) }
+            { switch("The hub takes load off the root", method.hub_loss, Choice::HubLoss) }
+            <Labelled shown={Shown::of(state, &[], Field::Elements)} label="Elements of a blade" />
+            <Labelled shown={Shown::of(state, &[], Field::Amplification)} label="Amplification at transition (9 quiet air, 4 disturbed)" />
+        </div>
+    }
+}
+
+fn family(family: &Family) -> Html {
+    let about = &family.about;
+    let (low, high) = family.reynolds_range();
+    let thousands = |re: f64| fixed((re / 1000.0).round() * 1000.0, 0);
+    let reynolds = if family.polar_count() == 1 {
+        "one table for every Reynolds number".to_string()
+    } else {
+        format!("Reynolds {} to {}", thousands(low), thousands(high))
+    };
+    let thickness = family.thickness_range().map_or_else(
+        || "one thickness".to_string(),
+        |(low, high)| format!("{} to {} % thick", significant(100.0 * low, 2), significant(100.0 * high, 2)),
+    );
+    let origin =
+        if about.origin.is_empty() { "The job does not say where they come from." } else { &about.origin };
+    html! {
+        <>
+            <b>{ &about.title }</b>{ format!(", {} tables, {reynolds}, {thickness}.", family.polar_count()) }
+            <p class="note">{ origin }</p>
+        </>
+    }
+}
+
+#[derive(Properties, PartialEq)]
+struct OutsideProps {
+    point: Rc<Option<PointResult>>,
+}
+
+/// Where the answer leaves what the tables or the method cover.
+#[component]
+fn Outside(props: &OutsideProps) -> Html {
+    let Some(result) = &*props.point else { return html! {} };
+    let lines = result.notes.iter().map(|&note| {
+        let at: Vec<String> = (0..result.stations.len())
+            .filter(|&i| result.stations[i].notes.contains(&note))
+            .map(|i| (i + 1).to_string())
+            .collect();
+        let place = if at.is_empty() { "between stations".into() } else { format!("at station {}", at.join(", ")) };
+        html! { <li class={(note == Note::NoBalance).then_some("bad")}>{ format!("{} – {place}", super::form::capital(note.words())) }</li> }
+    });
+    html! {
+        <>
+            <h3>{ format!("Worth knowing at {}", result.name) }</h3>
+            if result.notes.is_empty() {
+                <p class="note">{ "Every station works inside its tables." }</p>
+            } else {
+                <ul class="outside">{ for lines }</ul>
+            }
+        </>
+    }
+}

@@ -1,0 +1,66 @@
+//! What is seen. Components take values and give actions; they compute nothing.
+
+pub mod blade;
+pub mod caution;
+pub mod chips;
+pub mod coefficients;
+pub mod drop;
+pub mod form;
+pub mod head;
+pub mod mark;
+pub mod method;
+pub mod notice;
+pub mod page;
+pub mod panel;
+pub mod points;
+pub mod reading;
+pub mod room;
+pub mod steps;
+pub mod units;
+pub mod verdict;
+
+use std::rc::Rc;
+
+use yew::prelude::*;
+
+use crate::state::{Action, State};
+
+/// Where actions go.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Act(pub Callback<Action>);
+
+impl Act {
+    /// A callback that sends the action made from what it is given.
+    pub fn on<T: 'static>(&self, make: impl Fn(T) -> Action + 'static) -> Callback<T> {
+        self.0.reform(make)
+    }
+
+    /// Sends an action.
+    pub fn send(&self, action: Action) {
+        self.0.emit(action);
+    }
+}
+
+/// Where actions go, for the component that asks.
+#[hook]
+pub fn use_act() -> Act {
+    // The application provides it around everything.
+    use_context::<Act>().unwrap_or_else(|| Act(Callback::noop()))
+}
+
+/// The state as seen in one frame; compared by identity.
+#[derive(Clone, Debug)]
+pub struct Seen(pub Rc<State>);
+
+impl PartialEq for Seen {
+    fn eq(&self, other: &Self) -> bool {
+        Rc::ptr_eq(&self.0, &other.0)
+    }
+}
+
+impl std::ops::Deref for Seen {
+    type Target = State;
+    fn deref(&self) -> &State {
+        &self.0
+    }
+}

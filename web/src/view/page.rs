@@ -1,0 +1,122 @@
+//! The page: head, verdict, the rack with what stands beside it, panels, foot.
+
+use std::rc::Rc;
+
+use yew::prelude::*;
+
+use super::blade::{BladeSettings, StationTable, in_a_line};
+use super::coefficients::{self, Coefficients};
+use super::head::Head;
+use super::method::MethodPanel;
+use super::notice::Said;
+use super::panel::Panel;
+use super::points::Points;
+use super::reading::{Lying, MapReading, Standing, StationReading};
+use super::room::{Room, use_room};
+use super::steps::Steps;
+use super::verdict::Verdict;
+use super::{Seen, caution};
+use crate::app::{Later, Now};
+use crate::chart::hatch::Hatches;
+use crate::editor::Curves;
+use crate::number::{NO_FIGURE, fixed};
+
+/// Properties of [`Page`].
+#[derive(Properties, PartialEq)]
+pub struct PageProps {
+    /// The state.
+    pub state: Seen,
+    /// What is shown within the frame of an edit.
+    pub now: Rc<Now>,
+    /// What follows in a later frame.
+    pub later: Rc<Later>,
+}
+
+/// The page.
+#[component]
+pub fn Page(props: &PageProps) -> Html {
+    let (state, now) = (&props.state, &props.now);
+    let narrow = use_room() == Room::Narrow;
+    html! {
+        <>
+            <Hatches />
+            <Head state={state.clone()} kept={now.kept} />
+            if let Some(notice) = &state.notice { <Said notice={notice.clone()} /> }
+            <main>
+                if narrow { <Lying ..props.clone() /> }
+                if let Some(result) = &*now.point { <Verdict result={result.clone()} units={state.units} /> }
+                <div class="sheet" style={format!("--chip-rows: {}", chip_rows(props))}>
+                    if !narrow { <Standing ..props.clone() /> }
+                    <div class="work">
+                        <Steps />
+                        <section class="hero" id="departure" aria-label="Departure">
+                            <MapReading ..props.clone() />
+                            <StationReading ..props.clone() />
+                        </section>
+                        <Panels ..props.clone() />
+                    </div>
+                </div>
+            </main>
+            <footer>{ caution::foot() }</footer>
+        </>
+    }
+}
+
+/// Rows the flight points take above the blade, so that the map beside it starts as low.
+fn chip_rows(props: &PageProps) -> usize {
+    props.state.job().flight_points.len().div_ceil(2).clamp(2, 4)
+}
+
+impl Clone for PageProps {
+    fn clone(&self) -> Self {
+        Self { state: self.state.clone(), now: self.now.clone(), later: self.later.clone() }
+    }
+}
+
+#[component]
+fn Panels(props: &PageProps) -> Html {
+    let (state, now, later) = (&props.state, &props.now, &props.later);
+    let open = use_memo((), |()| wide());
+    let job = state.job();
+    let answered =
+        later.points.iter().filter(|p| p.as_ref().as_ref().is_some_and(|r| r.rpm.is_some())).count();
+    html! {
+        <>
+            <Panel id="points" number={1} title="Flight points" open={*open}
+                result={format!("{} points, {answered} with an answer", job.flight_points.len())}>
+                <Points state={state.clone()} results={later.points.clone()} />
+            </Panel>
+            <Panel id="blade" number={2} title="Blade" result={in_a_line(job, state.units)} open={*open}>
+                <BladeSettings state={state.clone()} />
+                <div class="blade-grid">
+                    <div class="blade-table">
+                        <StationTable state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} points={later.points.clone()} />
+                    </div>
+                    <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} />
+                </div>
+            </Panel>
+            <Panel id="coefficients" number={3} title="Coefficients" open={*open}
+                result={coefficients::in_a_line((*now.point).as_ref())}>
+                <Coefficients curves={later.curves.clone()} point={now.point.clone()} units={state.units} />
+            </Panel>
+            <Panel id="method" number={4} title="How it is computed" result={method_line(props)} open={*open}>
+                <MethodPanel state={state.clone()} rig={now.rig.clone()} point={now.point.clone()} />
+            </Panel>
+        </>
+    }
+}
+
+fn method_line(props: &PageProps) -> String {
+    let solidity = props.now.rig.as_ref().map(|r| r.0.propeller_figures());
+    let figures = solidity.map_or_else(
+        || NO_FIGURE.to_string(),
+        |p| format!("activity factor {}, solidity {}", fixed(p.activity_factor, 0), fixed(p.solidity, 3)),
+    );
+    format!("{} elements a blade; {figures}", props.state.job().method.elements)
+}
+
+/// Whether there is room for open panels.
+fn wide() -> bool {
+    let width = web_sys::window().and_then(|w| w.inner_width().ok()).and_then(|w| w.as_f64());
+    width.is_none_or(|w| w >= 620.0)
+}

@@ -1,0 +1,158 @@
+//! One radius axis, three readings: the blade, the departure map, one station.
+
+use std::rc::Rc;
+
+use spokeshave::job::Rotation;
+use spokeshave::result::{PointResult, StationResult};
+use spokeshave::section::library;
+use yew::prelude::*;
+
+use super::chips::{Chips, sentence};
+use super::page::PageProps;
+use super::use_act;
+use crate::blade_view::{
+    BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
+};
+use crate::state::Action;
+use crate::units::Quantity;
+
+/// Length of the radius axis, pixels.
+const AXIS_PX: f64 = 440.0;
+
+/// The radius axis of the job's blade.
+fn axis(props: &PageProps) -> RadiusAxis {
+    let p = &props.state.job().propeller;
+    RadiusAxis::new(p.hub_diameter_m / 2.0, p.diameter_m / 2.0, AXIS_PX)
+}
+
+/// The stations at the flight point selected; none where it has no answer.
+fn stations(props: &PageProps) -> Vec<StationResult> {
+    props.now.point.as_ref().as_ref().map_or_else(Vec::new, |r| r.stations.clone())
+}
+
+/// The blade standing: flight points, their sentence, the blade with its departure.
+#[component]
+pub fn Standing(props: &PageProps) -> Html {
+    let act = use_act();
+    html! {
+        <div class="side">
+            <Chosen ..props.clone() />
+            { blade(props, false, &act.on(Action::SelectStation)) }
+        </div>
+    }
+}
+
+/// The blade lying down, on narrow screens.
+#[component]
+pub fn Lying(props: &PageProps) -> Html {
+    let act = use_act();
+    html! {
+        <div class="lying">
+            <Chips state={props.state.clone()} />
+            { blade(props, true, &act.on(Action::SelectStation)) }
+        </div>
+    }
+}
+
+#[component]
+fn Chosen(props: &PageProps) -> Html {
+    let state = &props.state;
+    let point = state.job().flight_points.get(state.point);
+    html! {
+        <>
+            <Chips state={state.clone()} />
+            <p class="point-note">{ point.map(|p| sentence(state.units, p, (*props.now.point).as_ref())) }</p>
+        </>
+    }
+}
+
+fn blade(props: &PageProps, lying: bool, on_select: &Callback<usize>) -> Html {
+    let state = &props.state;
+    let Some(rig) = &props.now.rig else { return html! {} };
+    let shape = Rc::new(Planform::of(&rig.0.rotor.blade));
+    let stations = Rc::new(stations(props));
+    if stations.is_empty() {
+        return no_answer(props);
+    }
+    let (length, selected) = (state.units.unit(Quantity::Length), state.station);
+    if lying {
+        return html! { <BladeStrip {shape} {stations} {length} {selected} on_select={on_select.clone()} /> };
+    }
+    let leading_right = state.job().propeller.rotation == Rotation::ClockwiseFromBehind;
+    html! {
+        <BladeRack {shape} {stations} axis={axis(props)} {length} {selected} {leading_right} on_select={on_select.clone()} />
+    }
+}
+
+fn no_answer(props: &PageProps) -> Html {
+    let words = props.now.point.as_ref().as_ref().map_or("There is no flight point.", |r| r.state.sentence());
+    html! { <p class="no-answer">{ words }{ " The blade has no departure to show." }</p> }
+}
+
+/// The departure map, or why there is none.
+#[component]
+pub fn MapReading(props: &PageProps) -> Html {
+    let act = use_act();
+    let (state, later) = (&props.state, &props.later);
+    let narrow = super::room::use_room() == super::room::Room::Narrow;
+    let map = use_memo(later.map.clone(), |map| map.as_ref().clone().map(Rc::new));
+    let Some(map) = (*map).clone() else {
+        return html! { <div class="map-place">{ no_answer(props) }</div> };
+    };
+    let stations = stations(props).iter().map(|s| (s.radius_m, s.departure_deg)).collect::<Vec<_>>();
+    html! {
+        <div class="map-place">
+            <DepartureChart {map} axis={axis(props)} marks={marks(props)} {stations} selected={state.station}
+                length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)} note={map_note(props)}
+                radius_figures={narrow} on_station={act.on(Action::SelectStation)} on_mark={act.on(Action::SelectPoint)} />
+        </div>
+    }
+}
+
+fn marks(props: &PageProps) -> Vec<FlightMark> {
+    let (state, later) = (&props.state, &props.later);
+    let points = state.job().flight_points.iter().enumerate();
+    let advance = |r: Option<&PointResult>| r.and_then(|r| r.figures.effective_pitch_m);
+    points
+        .map(|(i, p)| FlightMark {
+            name: p.name.clone().into(),
+            advance_m: advance(later.points.get(i).and_then(|r| r.as_ref().as_ref())),
+            selected: i == state.point,
+        })
+        .collect()
+}
+
+fn map_note(props: &PageProps) -> String {
+    let state = &props.state;
+    let name = state.job().flight_points.get(state.point).map_or("", |p| p.name.as_str());
+    format!("in the air of {name}; each mark stands where the blade makes that advance per turn")
+}
+
+/// The station selected, in detail.
+#[component]
+pub fn StationReading(props: &PageProps) -> Html {
+    let act = use_act();
+    let (state, now) = (&props.state, &props.now);
+    let i = state.station;
+    let result = now.point.as_ref().as_ref().filter(|r| !r.stations.is_empty());
+    let Some((point, station)) = result.and_then(|r| Some((r, r.stations.get(i)?))) else {
+        return html! { <div class="detail">{ no_answer(props) }</div> };
+    };
+    html! {
+        <div class="detail">
+            <StationCard station={station.clone()} index={i} count={point.stations.len()} airspeed_m_s={point.airspeed_m_s}
+                rpm={point.rpm} outline={outline(props, station)} lift_to_drag={now.lift_to_drag.clone()}
+                length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
+                on_select={act.on(Action::SelectStation)} />
+        </div>
+    }
+}
+
+/// The outline of the station's section; none for a section that the job brought as tables only.
+fn outline(props: &PageProps, station: &StationResult) -> Rc<Vec<[f64; 2]>> {
+    let job = props.state.job();
+    let name = job.propeller.stations.get(props.state.station).map_or("", |s| s.section.as_str());
+    let own = job.sections.iter().any(|s| s.name == name);
+    let outline = if own { None } else { library().outline(name, station.thickness_ratio) };
+    Rc::new(outline.map_or_else(Vec::new, |o| o.points().to_vec()))
+}

@@ -1,0 +1,42 @@
+//! Steps through the page: links to its parts, the one in view marked.
+
+use gloo_events::EventListener;
+use yew::prelude::*;
+
+/// Parts of the page by id and name, in the order of the job.
+pub const PARTS: [(&str, &str); 5] = [
+    ("departure", "Departure"),
+    ("points", "1 Flight points"),
+    ("blade", "2 Blade"),
+    ("coefficients", "3 Coefficients"),
+    ("method", "4 Method"),
+];
+
+/// Height over which a part counts as reached, pixels.
+const REACHED_PX: f64 = 160.0;
+
+/// The links.
+#[component]
+pub fn Steps() -> Html {
+    let here = use_state_eq(|| 0usize);
+    let setter = here.setter();
+    use_effect_with((), move |()| {
+        let listener = web_sys::window()
+            .map(|window| EventListener::new(&window, "scroll", move |_| setter.set(part_in_view())));
+        move || drop(listener)
+    });
+    let links = PARTS.iter().enumerate().map(|(i, (id, name))| {
+        let on = i == *here;
+        html! { <a href={format!("#{id}")} class={on.then_some("on")} aria-current={on.then_some("true")}>{ *name }</a> }
+    });
+    html! { <nav class="steps" aria-label="Parts of the page">{ for links }</nav> }
+}
+
+/// The last part whose top has been passed.
+fn part_in_view() -> usize {
+    let Some(document) = web_sys::window().and_then(|w| w.document()) else { return 0 };
+    let passed = |id: &str| {
+        document.get_element_by_id(id).is_some_and(|e| e.get_bounding_client_rect().top() < REACHED_PX)
+    };
+    PARTS.iter().rposition(|(id, _)| passed(id)).unwrap_or(0)
+}

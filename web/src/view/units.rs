@@ -1,0 +1,45 @@
+//! Picking units.
+
+use yew::prelude::*;
+
+use super::form::Pick;
+use super::use_act;
+use crate::state::Action;
+use crate::units::{ForceUnit, HeightUnit, LengthUnit, PowerUnit, SpeedUnit, TorqueUnit, Units};
+
+/// Properties of [`UnitPicks`].
+#[derive(Properties, PartialEq)]
+pub struct UnitPicksProps {
+    /// The units shown.
+    pub units: Units,
+}
+
+/// Makes one list of units.
+macro_rules! list {
+    ($act:expr, $units:expr, $label:literal, $field:ident, $kind:ty) => {{
+        let units = $units;
+        let options: Vec<AttrValue> = <$kind>::ALL.iter().map(|u| AttrValue::from(u.symbol())).collect();
+        let picked = <$kind>::ALL.iter().position(|u| *u == units.$field);
+        let onpick = $act.on(move |i: usize| {
+            let $field = <$kind>::ALL.get(i).copied().unwrap_or(units.$field);
+            Action::Units(Units { $field, ..units })
+        });
+        html! { <Pick label={$label} {options} {picked} {onpick} /> }
+    }};
+}
+
+/// One list for each kind of figure.
+#[component]
+pub fn UnitPicks(props: &UnitPicksProps) -> Html {
+    let (act, units) = (use_act(), props.units);
+    html! {
+        <div class="unit-picks">
+            { list!(act, units, "Lengths", length, LengthUnit) }
+            { list!(act, units, "Airspeed", speed, SpeedUnit) }
+            { list!(act, units, "Thrust", force, ForceUnit) }
+            { list!(act, units, "Power", power, PowerUnit) }
+            { list!(act, units, "Torque", torque, TorqueUnit) }
+            { list!(act, units, "Height", height, HeightUnit) }
+        </div>
+    }
+}

@@ -1,0 +1,149 @@
+//! The few figures that decide, for the flight point selected.
+
+use spokeshave::result::{PointResult, State as Answer, StationResult};
+use yew::prelude::*;
+
+use crate::number::{NO_FIGURE, figure, fixed, fixed_or_none, signed, with_unit};
+use crate::units::{Quantity, Units};
+
+/// One figure of the verdict.
+#[derive(Clone, Debug, PartialEq)]
+struct Cell {
+    name: &'static str,
+    figure: String,
+    unit: &'static str,
+    /// A line under it.
+    more: String,
+}
+
+/// Properties of [`Verdict`].
+#[derive(Properties, PartialEq)]
+pub struct VerdictProps {
+    /// The flight point worked out.
+    pub result: PointResult,
+    /// Units shown.
+    pub units: Units,
+}
+
+/// The figures in a row; a sentence where there is no answer.
+#[component]
+pub fn Verdict(props: &VerdictProps) -> Html {
+    let result = &props.result;
+    if result.state != Answer::Ok {
+        return html! {
+            <section class="verdict-none" aria-label="Verdict">
+                <b>{ format!("{}: no answer. ", result.name) }</b>{ result.state.sentence() }
+            </section>
+        };
+    }
+    let cells = cells(props.units, result).into_iter().map(|cell| {
+        html! {
+            <li>
+                <span class="verdict-name">{ cell.name }</span>
+                <span class="verdict-figure"><b>{ cell.figure }</b>
+                    if !cell.unit.is_empty() { <span class="unit">{ cell.unit }</span> }
+                </span>
+                <span class="verdict-more">{ cell.more }</span>
+            </li>
+        }
+    });
+    html! {
+        <section aria-label={format!("Verdict at {}", result.name)}><ul class="verdict">{ for cells }</ul></section>
+    }
+}
+
+fn cells(units: Units, r: &PointResult) -> Vec<Cell> {
+    let f = &r.figures;
+    let of = |name, quantity, value, more| Cell {
+        name,
+        figure: figure(units, quantity, value),
+        unit: units.symbol(quantity),
+        more,
+    };
+    let plain = |name, value: Option<f64>, decimals, more| Cell {
+        name,
+        figure: fixed_or_none(value, decimals),
+        unit: "",
+        more,
+    };
+    let torque = format!("torque {}", with_unit(units, Quantity::Torque, f.torque_n_m));
+    vec![
+        efficiency(r),
+        of("Thrust", Quantity::Force, f.thrust_n, format!("thrust coefficient {}", fixed_or_none(f.ct, 4))),
+        of("Shaft power", Quantity::Power, f.power_w, torque),
+        plain("Tip Mach number", f.tip_mach, 2, format!("at {}", with_unit(units, Quantity::Rpm, r.rpm))),
+        departure(r),
+        Cell {
+            name: "Blade angle at 0.75 R",
+            figure: f.blade_angle_075_deg.map_or_else(|| NO_FIGURE.into(), |a| format!("{}°", fixed(a, 1))),
+            unit: "",
+            more: format!("pitch {}", with_unit(units, Quantity::Length, f.geometric_pitch_m)),
+        },
+        of(
+            "Slip",
+            Quantity::Share,
+            f.slip,
+            format!("advance {} a turn", with_unit(units, Quantity::Length, f.effective_pitch_m)),
+        ),
+    ]
+}
+
+fn efficiency(r: &PointResult) -> Cell {
+    let f = &r.figures;
+    let (name, value) = match f.figure_of_merit {
+        Some(merit) => ("Figure of merit", Some(merit)),
+        None => ("Efficiency", f.efficiency),
+    };
+    let advance = fixed_or_none(f.advance_ratio, 2);
+    let figure = fixed_or_none(value, 2);
+    let more = match (value, f.thrust_n) {
+        (None, Some(t)) if t <= 0.0 => "no thrust to speak of".into(),
+        _ => format!("advance ratio {advance}"),
+    };
+    Cell { name, figure, unit: "", more }
+}
+
+fn departure(r: &PointResult) -> Cell {
+    let worst = r
+        .stations
+        .iter()
+        .enumerate()
+        .filter_map(|(i, s)| Some((i, s.departure_deg?)))
+        .max_by(|a, b| a.1.abs().total_cmp(&b.1.abs()));
+    let inside = r.stations.iter().filter(|s| inside_band(s) == Some(true)).count();
+    Cell {
+        name: "Worst departure",
+        figure: worst.map_or_else(|| NO_FIGURE.into(), |w| format!("{}°", signed(w.1, 1))),
+        unit: "",
+        more: worst.map_or_else(String::new, |w| {
+            format!("station {}; {inside} of {} in the band", w.0 + 1, r.stations.len())
+        }),
+    }
+}
+
+/// Whether a station works inside its working band.
+#[must_use]
+pub fn inside_band(s: &StationResult) -> Option<bool> {
+    Some((s.band_low_deg?..=s.band_high_deg?).contains(&s.departure_deg?))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use spokeshave::job::{DEMOS, Job};
+    use spokeshave::rig::Rig;
+
+    #[test]
+    fn no_cell_is_empty_at_rest_or_in_flight() {
+        for demo in DEMOS {
+            let job = Job::from_json(demo.json).unwrap();
+            for result in Rig::new(&job).unwrap().analysis().flight_points {
+                if result.state == Answer::Ok {
+                    for cell in cells(Units::default(), &result) {
+                        assert!(cell.figure.chars().any(|c| c.is_ascii_digit()), "{}: {cell:?}", result.name);
+                    }
+                }
+            }
+        }
+    }
+}
