@@ -1,6 +1,6 @@
 //! Choosing a station: the same list of options on the rack and on the strip.
 
-use crate::chart::number::signed;
+use crate::chart::number::{fixed, signed};
 use crate::chart::unit::Unit;
 use spokeshave::result::StationResult;
 use yew::prelude::*;
@@ -13,6 +13,21 @@ pub fn spoken(index: usize, station: &StationResult, length: &Unit) -> String {
         Some(d) => format!("{place}, departure {} degrees", signed(d, 1)),
         None => format!("{place}, no departure"),
     }
+}
+
+/// What a station says when the pointer rests on it.
+#[must_use]
+pub fn read_out(station: &StationResult, length: &Unit) -> String {
+    let place = length.text(station.radius_m);
+    let Some(departure) = station.departure_deg else { return format!("{place}: no departure") };
+    let band = station.band_low_deg.zip(station.band_high_deg);
+    let band = band.map_or_else(String::new, |(low, high)| {
+        format!(", working band {}° to {}°", signed(low, 1), signed(high, 1))
+    });
+    let share = station
+        .share_of_best
+        .map_or_else(String::new, |s| format!(", {} % of the best lift-to-drag", fixed(100.0 * s, 0)));
+    format!("{place}: {}°{band}{share}", signed(departure, 1))
 }
 
 /// The station a key moves to: up and right are outward, down and left inward.

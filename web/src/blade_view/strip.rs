@@ -1,7 +1,7 @@
 //! The blade lying down, for narrow screens: hub left, signed figures under it.
 
 use super::planform::{AHEAD, Planform};
-use super::stations::{StationOption, list, on_keys, spoken};
+use super::stations::{StationOption, list, on_keys, read_out, spoken};
 use crate::chart::axis::px;
 use crate::chart::departure;
 use crate::chart::number::{NONE, signed};
@@ -137,7 +137,9 @@ fn label(lie: &Lie, props: &BladeStripProps, index: usize, x: f64, size: f64) ->
     let lead = format!("M{} {low}L{} {}", px(at), px(x), px(BALLOON_Y - 9.0));
     html! {
         <>
-            <rect class="reach" x={px(x - size / 2.0)} y="0" width={px(size)} height={px(HEIGHT)} />
+            <rect class="reach" x={px(x - size / 2.0)} y="0" width={px(size)} height={px(HEIGHT)}>
+                <title>{ read_out(station, &props.length) }</title>
+            </rect>
             <line class="cut" x1={px(at)} x2={px(at)} y1={top} y2={low.clone()} />
             <path class="lead is-faint" d={lead} />
             <circle class="balloon" cx={px(x)} cy={px(BALLOON_Y)} r="9" />

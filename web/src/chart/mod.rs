@@ -9,6 +9,7 @@ pub mod line;
 pub mod linear;
 pub mod number;
 pub mod path;
+pub mod pointer;
 pub mod spread;
 pub mod ticks;
 #[cfg(test)]

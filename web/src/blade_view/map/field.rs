@@ -1,7 +1,8 @@
 //! One figure of the map as a grid for contours: gaps filled, padded by a cell all round.
 //!
-//! Contours of a grid end half a cell inside its outermost points. Padding with copies of the edge moves
-//! their ends out of the frame, which then cuts them clean.
+//! Contours of a grid close half a cell outside its outermost points, and the radii of the map stand half a cell
+//! inside its frame. The padding goes on as the last two points do, so that lines run straight to the frame,
+//! which cuts off where they close.
 
 use super::frame::Frame;
 use contour::ContourBuilder;
@@ -35,12 +36,10 @@ impl Field {
         }
         let full = filled(&known)?;
         let speed = frame.speed();
-        let inside = |i: usize, count: usize| i.saturating_sub(1).min(count - 1);
-        let values = (0..rows + 2).flat_map(|r| (0..columns + 2).map(move |c| (r, c)));
         Some(Self {
             columns: columns + 2,
             rows: rows + 2,
-            values: values.map(|(r, c)| full[[inside(r, rows), inside(c, columns)]]).collect(),
+            values: padded(&full),
             xs: map.airspeeds_m_s.iter().map(|v| speed.px(*v)).collect(),
             ys: map.radii_m.iter().map(|r| frame.axis.y(*r)).collect(),
         })
@@ -65,6 +64,27 @@ fn between(values: &[f64], index: f64) -> f64 {
     let i = (index.floor().max(0.0) as usize).min(values.len() - 2);
     let w = index - i as f64;
     values[i] + w * (values[i + 1] - values[i])
+}
+
+/// A cell more all round, gone on straight.
+fn padded(grid: &Array2<f64>) -> Vec<f64> {
+    let (rows, columns) = grid.dim();
+    let at = |r: usize, c: usize| {
+        let ((r0, r1), (c0, c1)) = (sources(r, rows), sources(c, columns));
+        let on = |near: f64, far: f64, outside: bool| if outside { 2.0 * near - far } else { near };
+        let row = |r: usize| on(grid[[r, c0]], grid[[r, c1]], c0 + 1 != c);
+        on(row(r0), row(r1), r0 + 1 != r)
+    };
+    (0..rows + 2).flat_map(|r| (0..columns + 2).map(move |c| at(r, c))).collect()
+}
+
+/// For a place in the padded grid: the nearest place in the grid itself and the one behind it.
+fn sources(padded: usize, count: usize) -> (usize, usize) {
+    match padded {
+        0 => (0, 1),
+        p if p > count => (count - 1, count - 2),
+        p => (p - 1, p - 1),
+    }
 }
 
 /// Gaps filled from the nearest figure in the row, and empty rows from the nearest row.
@@ -120,6 +140,13 @@ mod tests {
             "all but the fast side is hard"
         );
         assert!(most(0) < 410.0);
+    }
+
+    #[test]
+    fn padding_goes_on_straight() {
+        let grid = Array2::from_shape_fn((2, 3), |(r, c)| 10.0 * r as f64 + c as f64);
+        let expected = Array2::from_shape_fn((4, 5), |(r, c)| 10.0 * (r as f64 - 1.0) + c as f64 - 1.0);
+        assert_eq!(padded(&grid), expected.into_raw_vec_and_offset().0);
     }
 
     #[test]

@@ -35,6 +35,11 @@ impl Frame {
         Linear::new((ends.0.copied().unwrap_or(0.0), ends.1.copied().unwrap_or(1.0)), (self.left, self.right))
     }
 
+    /// Left, top, width, height.
+    pub(super) fn pane(&self) -> [f64; 4] {
+        [self.left, self.axis.top_px, self.width(), self.height()]
+    }
+
     pub(super) fn width(&self) -> f64 {
         self.right - self.left
     }

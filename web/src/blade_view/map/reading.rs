@@ -3,10 +3,10 @@
 use super::frame::Frame;
 use crate::chart::axis::px;
 use crate::chart::number::{fixed, signed};
+use crate::chart::pointer::place;
 use crate::chart::unit::Unit;
 use spokeshave::rotor::{DepartureMap, MapCell};
 use std::rc::Rc;
-use web_sys::Element;
 use yew::prelude::*;
 
 /// Properties of [`Reading`].
@@ -28,7 +28,7 @@ pub(super) fn Reading(props: &ReadingProps) -> Html {
     let frame = props.frame.clone();
     let onmousemove = {
         let (pointer, frame) = (pointer.clone(), frame.clone());
-        Callback::from(move |event: MouseEvent| pointer.set(place(&event, &frame)))
+        Callback::from(move |event: MouseEvent| pointer.set(place(&event, frame.pane())))
     };
     let onmouseleave = {
         let pointer = pointer.clone();
@@ -37,7 +37,7 @@ pub(super) fn Reading(props: &ReadingProps) -> Html {
     let onclick = {
         let (tell, frame) = (props.on_radius.clone(), frame.clone());
         Callback::from(move |event: MouseEvent| {
-            if let Some([_, y]) = place(&event, &frame) {
+            if let Some([_, y]) = place(&event, frame.pane()) {
                 tell.emit(frame.axis.scale().value(y));
             }
         })
@@ -49,18 +49,6 @@ pub(super) fn Reading(props: &ReadingProps) -> Html {
                 height={px(frame.height())} {onmousemove} {onmouseleave} {onclick} />
         </g>
     }
-}
-
-/// The pointer in the drawing's pixels, whatever its size on the screen.
-fn place(event: &MouseEvent, frame: &Frame) -> Option<[f64; 2]> {
-    let pane = event.target_dyn_into::<Element>()?.get_bounding_client_rect();
-    if pane.width() <= 0.0 || pane.height() <= 0.0 {
-        return None;
-    }
-    let share = |at: i32, from: f64, size: f64| ((f64::from(at) - from) / size).clamp(0.0, 1.0);
-    let x = frame.left + frame.width() * share(event.client_x(), pane.left(), pane.width());
-    let y = frame.axis.top_px + frame.height() * share(event.client_y(), pane.top(), pane.height());
-    Some([x, y])
 }
 
 fn shown(props: &ReadingProps, [x, y]: [f64; 2]) -> Html {

@@ -2,7 +2,7 @@
 
 use super::BladeRackProps;
 use super::layout::{BALLOON, BALLOON_R, Layout, REACH_DEG, TAG_HEIGHT, TAG_WIDTH};
-use crate::blade_view::stations::{StationOption, spoken};
+use crate::blade_view::stations::{StationOption, read_out, spoken};
 use crate::chart::axis::px;
 use crate::chart::departure;
 use crate::chart::number::signed_or_none;
@@ -22,7 +22,9 @@ pub(super) fn options(layout: &Layout, props: &BladeRackProps) -> Html {
         let chosen = i == props.selected;
         let drawing = html! {
             <>
-                <rect class="reach" x="0" y={px(from)} width={px(layout.width)} height={px((to - from).max(0.0))} />
+                <rect class="reach" x="0" y={px(from)} width={px(layout.width)} height={px((to - from).max(0.0))}>
+                    <title>{ read_out(station, &props.length) }</title>
+                </rect>
                 { cut(layout, props, station, heights[i], chosen) }
                 { mark(layout, station) }
                 { heights[i].map(|y| label(layout, i, station, y)) }

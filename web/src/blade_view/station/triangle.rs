@@ -101,11 +101,20 @@ fn arrows(air: &Air, props: &TriangleProps) -> Html {
                 { turning }
             </text>
             { side_words(air, props, corner, end, rays.as_ref()) }
-            <text x={px(x)} y={px(if up { 14.0 } else { HEIGHT - 6.0 })}>
-                { format!("meets the blade at {}", props.speed.text(air.speed())) }
-            </text>
+            if roomy(corner) {
+                <text x={px(x)} y={px(if up { 14.0 } else { HEIGHT - 6.0 })}>{ meets_words(air, &props.speed) }</text>
+            }
         </>
     }
+}
+
+/// Whether there is room for words to the left of the forward arrow.
+fn roomy(corner: [f64; 2]) -> bool {
+    corner[0] > 190.0
+}
+
+fn meets_words(air: &Air, speed: &Unit) -> String {
+    format!("meets the blade at {}", speed.text(air.speed()))
 }
 
 fn turning_words(air: &Air, speed: &Unit) -> String {
@@ -138,6 +147,9 @@ fn side_words(
         ends.extend(rays.best.map(|b| (b[1] + 2.0, "best".to_owned(), "")));
         ends.sort_by(|a, b| a.0.total_cmp(&b.0));
         words.extend(ends);
+    }
+    if !roomy(corner) {
+        words.push((HEIGHT, meets_words(air, speed), ""));
     }
     if air.forward < 0.0 {
         words.sort_by(|a, b| a.0.total_cmp(&b.0));

@@ -4,6 +4,7 @@ mod handles;
 mod inside;
 mod labels;
 mod layout;
+mod reading;
 mod table;
 
 use super::axis::{bottom, left, most_on, placed, px};
@@ -14,6 +15,7 @@ pub use handles::{Grip, Handle};
 
 use handles::{Handles, HandlesProps};
 use layout::Layout;
+use reading::{Reading, ReadingProps};
 use yew::prelude::*;
 
 /// How a curve is drawn.
@@ -161,6 +163,7 @@ pub fn LineChart(props: &LineChartProps) -> Html {
         })
     };
     let handles = HandlesProps::new(&layout, props.handles.clone(), props.step, on_grip);
+    let reading = ReadingProps::new(&layout, props.series.clone(), [props.x.clone(), props.y.clone()]);
     let role = if props.handles.is_empty() { "img" } else { "group" };
     let table = {
         let (title, x, y, series) =
@@ -176,6 +179,7 @@ pub fn LineChart(props: &LineChartProps) -> Html {
                     { axes(&layout, props) }
                     { labels::points(&layout, props) }
                     { labels::names(&layout, props) }
+                    <Reading ..reading />
                     <Handles ..handles />
                 </svg>
             </div>

@@ -29,7 +29,7 @@ pub(super) fn table(title: &str, x: &Axis, y: &Axis, series: &[Series]) -> Table
 }
 
 /// A curve's value at a place; `None` outside it and where it is broken.
-fn read(points: &[[f64; 2]], at: f64) -> Option<f64> {
+pub(super) fn read(points: &[[f64; 2]], at: f64) -> Option<f64> {
     let inside = |w: &&[[f64; 2]]| w[0][0] <= at && at <= w[1][0];
     let value = match points.windows(2).find(inside) {
         Some(w) if w[1][0] > w[0][0] => w[0][1] + (at - w[0][0]) / (w[1][0] - w[0][0]) * (w[1][1] - w[0][1]),
