@@ -28,6 +28,9 @@ const FASTEST_TIP_MACH: f64 = 1.2;
 const SLOWEST: f64 = 0.01;
 /// Nodes of a search over rpm.
 const NODES: u32 = 24;
+/// How far the rpm may change from one speed to the next for the short search to find it.
+const NEAR: f64 = 0.1;
+/// Of a search, as a share of its range.
 const CONVERGED: f64 = 1e-9;
 
 /// The condition at which a flight point's setting is met.
@@ -82,8 +85,9 @@ fn fixed_throttle(
         let c = with(rpm);
         power_w(&rig.rotor.loads(&c), &c) - shaft.power_w(rpm, &at.air, throttle)
     };
-    let nearby =
-        near.and_then(|rpm| rising_root((0.95 * rpm).max(low)..=(1.05 * rpm).min(high), 2, &spare).ok());
+    let nearby = near.and_then(|rpm| {
+        rising_root(((1.0 - NEAR) * rpm).max(low)..=((1.0 + NEAR) * rpm).min(high), 2, &spare).ok()
+    });
     let rpm = match nearby.map_or_else(|| rising_root(low..=high, NODES, &spare), Ok) {
         Ok(rpm) => rpm,
         Err(Missed::AboveRange) => return Err(State::OverLimitRpm),

@@ -7,7 +7,7 @@ use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, thrustless_speed_m_s};
 
 /// Speeds at which the full-throttle rpm is worked out; between them it follows a monotone cubic.
-const NODES: u32 = 12;
+const NODES: u32 = 8;
 
 /// Conditions at equal steps of speed from rest, at the air of `at`: at full throttle as far as the engine can be
 /// matched, or, without an engine, at the rpm of `at` up to where the thrust is gone.

@@ -31,7 +31,7 @@ pub struct DepartureMap {
 }
 
 /// The best angle is worked out at every so many conditions and interpolated between: it changes slowly along a line.
-const BEST_EVERY: usize = 6;
+const BEST_EVERY: usize = 8;
 
 /// The map of a propeller along a line of conditions, at the given radii (m).
 #[must_use]

@@ -2,6 +2,7 @@
 
 use std::f64::consts::TAU;
 
+use roots::{SimpleConvergency, find_root_brent};
 use serde::Serialize;
 
 use super::{Condition, Loads, Rotor};
@@ -87,19 +88,16 @@ pub fn curve_point(rotor: &Rotor, at: &Condition, airspeed_m_s: f64) -> CurvePoi
     }
 }
 
-/// The speed (m/s) at which thrust is gone, by steps of a tenth in J and halving; at most J = 6.
+/// The speed (m/s) at which thrust is gone, by steps of a tenth in J and Brent's method; at least J = 0.1, at most 6.
 #[must_use]
 pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
     let unit = at.turns_per_s() * 2.0 * rotor.blade.radius_m;
     let thrust = |j: f64| rotor.loads(&Condition { airspeed_m_s: j * unit, ..*at }).thrust_n;
-    let steps = (1..=60).map(|i| 0.1 * f64::from(i));
-    let Some(over) = steps.clone().find(|&j| thrust(j) < 0.0) else { return 6.0 * unit };
-    let (mut low, mut high) = (over - 0.1, over);
-    for _ in 0..20 {
-        let middle = 0.5 * (low + high);
-        if thrust(middle) < 0.0 { high = middle } else { low = middle }
-    }
-    low.max(0.1) * unit
+    let Some(over) = (1..=60).map(|i| 0.1 * f64::from(i)).find(|&j| thrust(j) < 0.0) else {
+        return 6.0 * unit;
+    };
+    let mut rule = SimpleConvergency { eps: 1e-7, max_iter: 40 };
+    find_root_brent(over - 0.1, over, thrust, &mut rule).unwrap_or(over).max(0.1) * unit
 }
 
 #[cfg(test)]

@@ -23,8 +23,8 @@ const STEP_RAD: f64 = 0.5 * std::f64::consts::PI / 180.0;
 const LOWEST_RAD: f64 = -4.0 * STEP_RAD;
 const HIGHEST_RAD: f64 = 40.0 * STEP_RAD;
 const BAND_REACH_RAD: f64 = 40.0 * STEP_RAD;
-/// Golden-section passes: half a degree to 2e-5 degrees.
-const PASSES: usize = 22;
+/// Golden-section passes: one degree to 1e-3 degrees, where the top of cl/cd is flat to 1e-8.
+const PASSES: usize = 14;
 
 /// The best angle of a section given by its coefficients, sought up to its stall angle (rad). `None` when it nowhere lifts.
 pub fn best(at: impl Fn(f64) -> Coefficients, stall_rad: f64) -> Option<Best> {

@@ -11,7 +11,7 @@ use super::family::{About, Family};
 use super::outline::Outline;
 use super::polar::{FEWEST_POINTS, Polar, PolarPoint};
 
-#[derive(Deserialize)]
+#[derive(Debug, Deserialize)]
 struct PackedFamily {
     name: String,
     title: String,
@@ -22,7 +22,7 @@ struct PackedFamily {
     polars: Vec<PackedPolar>,
 }
 
-#[derive(Deserialize)]
+#[derive(Debug, Deserialize)]
 struct PackedPolar {
     thickness_ratio: f64,
     reynolds: f64,
@@ -33,18 +33,18 @@ struct PackedPolar {
     cd: Vec<u32>,
 }
 
-/// One family with its sets of tables by n.
+/// One family; its tables are made ready when first asked for.
 #[derive(Debug)]
-struct Sets {
-    name: String,
-    outline: Option<Outline>,
-    by_n: Vec<(f64, Arc<Family>)>,
+struct Entry {
+    packed: PackedFamily,
+    by_n: Vec<(f64, OnceLock<Option<Arc<Family>>>)>,
+    outline: OnceLock<Option<Outline>>,
 }
 
 /// All families that come with the program.
 #[derive(Debug)]
 pub struct Library {
-    families: Vec<Sets>,
+    families: Vec<Entry>,
 }
 
 /// The library, unpacked on first use.
@@ -54,45 +54,50 @@ pub fn library() -> &'static Library {
         let packed: Vec<PackedFamily> =
             postcard::from_bytes(include_bytes!(concat!(env!("OUT_DIR"), "/airfoils.bin")))
                 .unwrap_or_default();
-        Library { families: packed.iter().map(unpacked).collect() }
+        Library { families: packed.into_iter().map(entry).collect() }
     })
 }
 
 impl Library {
     /// Names of the families, in order.
     pub fn names(&self) -> impl Iterator<Item = &str> {
-        self.families.iter().map(|f| f.name.as_str())
+        self.families.iter().map(|f| f.packed.name.as_str())
     }
 
     /// The family of a name, with the set of tables whose n is nearest to `n_crit`.
     #[must_use]
     pub fn family(&self, name: &str, n_crit: f64) -> Option<&Arc<Family>> {
-        let sets = &self.families.iter().find(|f| f.name == name)?.by_n;
+        let entry = self.entry(name)?;
         let off = |n: f64| (n - n_crit).abs();
-        sets.iter().min_by(|a, b| off(a.0).total_cmp(&off(b.0))).map(|(_, family)| family)
+        let (n, set) = entry.by_n.iter().min_by(|a, b| off(a.0).total_cmp(&off(b.0)))?;
+        set.get_or_init(|| one_set(&entry.packed, *n).map(Arc::new)).as_ref()
     }
 
     /// The outline of a family at a thickness ratio, where the family has one and it can be drawn that thick.
     #[must_use]
     pub fn outline(&self, name: &str, thickness_ratio: f64) -> Option<Outline> {
-        let base = self.families.iter().find(|f| f.name == name)?.outline.as_ref()?;
+        let entry = self.entry(name)?;
+        let base = entry.outline.get_or_init(|| Outline::read(&entry.packed.outline).ok()).as_ref()?;
         base.scaled_to(thickness_ratio).ok()
     }
 
     /// The values of n for which a family has tables.
     #[must_use]
     pub fn n_crits(&self, name: &str) -> Vec<f64> {
-        let sets = self.families.iter().find(|f| f.name == name);
-        sets.map_or_else(Vec::new, |s| s.by_n.iter().map(|(n, _)| *n).collect())
+        self.entry(name).map_or_else(Vec::new, |e| e.by_n.iter().map(|(n, _)| *n).collect())
+    }
+
+    fn entry(&self, name: &str) -> Option<&Entry> {
+        self.families.iter().find(|f| f.packed.name == name)
     }
 }
 
-fn unpacked(packed: &PackedFamily) -> Sets {
+fn entry(packed: PackedFamily) -> Entry {
     let mut ns: Vec<f64> = packed.polars.iter().map(|p| p.n_crit).collect();
     ns.sort_by(f64::total_cmp);
     ns.dedup();
-    let by_n = ns.into_iter().filter_map(|n| Some((n, Arc::new(one_set(packed, n)?)))).collect();
-    Sets { name: packed.name.clone(), outline: Outline::read(&packed.outline).ok(), by_n }
+    let by_n = ns.into_iter().map(|n| (n, OnceLock::new())).collect();
+    Entry { packed, by_n, outline: OnceLock::new() }
 }
 
 fn one_set(packed: &PackedFamily, n: f64) -> Option<Family> {
@@ -133,7 +138,12 @@ mod tests {
         let names: Vec<&str> = library().names().collect();
         assert!(names.contains(&"clark-y"));
         for name in names {
-            assert!(!library().n_crits(name).is_empty(), "{name} has no usable tables");
+            let sets = library().n_crits(name);
+            assert!(!sets.is_empty(), "{name} has no tables");
+            assert!(
+                sets.iter().all(|n| library().family(name, *n).is_some()),
+                "{name}'s tables are not usable"
+            );
         }
     }
 }
