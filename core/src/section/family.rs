@@ -278,7 +278,8 @@ fn entry(polar: &Polar) -> Entry {
 
 /// Stall is sought within ±25°: beyond it a plate's lift may exceed a thin section's.
 fn landmarks(polar: &Polar) -> Landmarks {
-    let near = || polar.points.iter().filter(|p| p.alpha_deg.abs() <= 25.0);
+    // Backwards, so that of equal lifts the angle nearest to the attached range counts.
+    let near = || polar.points.iter().rev().filter(|p| p.alpha_deg.abs() <= 25.0);
     let by_lift = |a: &&super::polar::PolarPoint, b: &&super::polar::PolarPoint| a.cl.total_cmp(&b.cl);
     let rad = |p: Option<&super::polar::PolarPoint>| p.map(|p| p.alpha_deg.to_radians());
     let (points, n) = (&polar.points, polar.points.len());
@@ -296,3 +297,6 @@ fn landmarks(polar: &Polar) -> Landmarks {
     });
     Landmarks { zero_lift, stall, negative_stall, first, last }
 }
+
+#[cfg(test)]
+mod tests;

@@ -146,3 +146,6 @@ impl Sum for Landmarks {
         })
     }
 }
+
+#[cfg(test)]
+mod tests;
