@@ -19,6 +19,7 @@ pub struct Curve {
     x: Vec<f64>,
     y: Vec<f64>,
     slope: Vec<f64>,
+    straight: bool,
 }
 
 impl Curve {
@@ -31,7 +32,13 @@ impl Curve {
             return None;
         }
         let slope = slopes(&x, &y);
-        Some(Self { x, y, slope })
+        Some(Self { x, y, slope, straight: false })
+    }
+
+    /// Straight lines through the points, under the same conditions.
+    #[must_use]
+    pub fn polyline(x: Vec<f64>, y: Vec<f64>) -> Option<Self> {
+        Self::new(x, y).map(|curve| Self { straight: true, ..curve })
     }
 
     /// The value at `x`.
@@ -55,6 +62,10 @@ impl Curve {
         }
         let (a, b) = (i - 1, i);
         let h = self.x[b] - self.x[a];
+        if self.straight {
+            let slope = (self.y[b] - self.y[a]) / h;
+            return Jet { value: self.y[a] + slope * (x - self.x[a]), slope };
+        }
         hermite(h, (x - self.x[a]) / h, (self.y[a], self.slope[a]), (self.y[b], self.slope[b]))
     }
 
@@ -121,6 +132,12 @@ mod tests {
         for (x, y) in [(0.0, 2.0), (1.0, 5.0), (3.0, 4.0), (-9.0, 2.0), (9.0, 4.0)] {
             assert!((c.at(x) - y).abs() < 1e-15, "{x}");
         }
+    }
+
+    #[test]
+    fn a_polyline_is_straight_between_its_points() {
+        let c = Curve::polyline(vec![0.0, 1.0, 3.0], vec![2.0, 5.0, 4.0]).unwrap();
+        assert_eq!((c.at(0.5), c.at(2.0), c.jet(2.0).slope), (3.5, 4.5, -0.5));
     }
 
     #[test]

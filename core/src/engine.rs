@@ -1,6 +1,6 @@
 //! What the shaft offers: piston engines by their full-throttle curve, electric motors by their constants.
 //!
-//! Piston: full-throttle power by a monotone cubic in engine rpm, never extrapolated; at height by A. W. Gagg and E. V. Ferrar, SAE Trans.
+//! Piston: full-throttle power by a monotone cubic (or straight lines) in engine rpm, never extrapolated; at height by A. W. Gagg and E. V. Ferrar, SAE Trans.
 //! 29, 1934: `P/P0 = σ − (1 − σ)/7.55`, or held up to a height and by the same law from there.
 //! Electric: the first-order motor, `Q = Kt (I − I0)`, `Kt = 30/(π Kv)`, `I = (d Voc − n/Kv)/(Rm + Rc + d² Rb)` at duty d, with the
 //! battery's sag; the current limit holds the current. All rpm are of the propeller unless they say otherwise.
@@ -9,7 +9,7 @@ use std::f64::consts::PI;
 
 use crate::air::{Air, RHO0_KG_M3};
 use crate::curve::Curve;
-use crate::job::{AltitudeLaw, Electric, Engine, Piston};
+use crate::job::{AltitudeLaw, Electric, Engine, Interpolation, Piston};
 
 /// An engine ready to be asked.
 #[derive(Clone, Debug)]
@@ -53,7 +53,11 @@ impl Shaft {
         match engine {
             Engine::Piston(p) => {
                 let (rpm, power) = p.full_throttle.iter().map(|f| (f.rpm, f.power_w)).unzip();
-                Some(Self::Piston(PistonShaft { curve: Curve::new(rpm, power)?, data: p.clone() }))
+                let curve = match p.interpolation {
+                    Interpolation::MonotoneCubic => Curve::new(rpm, power),
+                    Interpolation::Linear => Curve::polyline(rpm, power),
+                };
+                Some(Self::Piston(PistonShaft { curve: curve?, data: p.clone() }))
             }
             Engine::Electric(e) => Some(Self::Electric(ElectricShaft { data: e.clone() })),
         }
@@ -229,6 +233,7 @@ mod tests {
         let point = |rpm: f64, power_w: f64| PowerPoint { rpm, power_w };
         let data = Piston {
             full_throttle: vec![point(2000.0, 30_000.0), point(3000.0, 45_000.0)],
+            interpolation: Interpolation::default(),
             gear_ratio: 1.0,
             max_rpm: None,
             idle_rpm: None,

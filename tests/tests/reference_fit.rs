@@ -18,7 +18,8 @@ fn matched(inputs: &Value) -> Job {
     let mut document: Value = serde_json::to_value(job(&blade)).unwrap();
     let curve = numbers(&inputs["engine"]["rpm"]).into_iter().zip(numbers(&inputs["engine"]["power_W"]));
     let points: Vec<Value> = curve.map(|(rpm, power_w)| json!({"rpm": rpm, "power_w": power_w})).collect();
-    document["engine"] = json!({"kind": "piston", "full_throttle": points});
+    document["engine"] =
+        json!({"kind": "piston", "full_throttle": points, "interpolation": inputs["interpolation"]});
     let speeds = numbers(&inputs["V"]);
     document["flight_points"] = speeds
         .iter()

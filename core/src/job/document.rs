@@ -113,6 +113,9 @@ by_kind! {
 pub struct Piston {
     /// Full-throttle shaft power by engine rpm at sea level, by rising rpm.
     pub full_throttle: Vec<PowerPoint>,
+    /// How the power runs between the points of the curve.
+    #[serde(default)]
+    pub interpolation: Interpolation,
     /// Engine rpm over propeller rpm.
     #[serde(default = "unity")]
     pub gear_ratio: f64,
@@ -131,6 +134,18 @@ pub struct Piston {
     /// Fuel on board, kg.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub fuel_kg: Option<f64>,
+}
+
+/// How a curve runs between its points.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq, Serialize, Deserialize)]
+#[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
+#[serde(rename_all = "kebab-case")]
+pub enum Interpolation {
+    /// A smooth curve without overshoot.
+    #[default]
+    MonotoneCubic,
+    /// Straight lines.
+    Linear,
 }
 
 /// One point of a full-throttle curve.
