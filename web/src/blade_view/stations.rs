@@ -8,7 +8,7 @@ use yew::prelude::*;
 /// What one station is called by those who cannot see the drawing.
 #[must_use]
 pub fn spoken(index: usize, station: &StationResult, length: &Unit) -> String {
-    let place = format!("Station {}, radius {}", index + 1, length.text(station.radius_m));
+    let place = format!("Station {}, radius {}", index + 1, length.short(station.radius_m));
     match station.departure_deg {
         Some(d) => format!("{place}, departure {} degrees", signed(d, 1)),
         None => format!("{place}, no departure"),
@@ -18,7 +18,7 @@ pub fn spoken(index: usize, station: &StationResult, length: &Unit) -> String {
 /// What a station says when the pointer rests on it.
 #[must_use]
 pub fn read_out(station: &StationResult, length: &Unit) -> String {
-    let place = length.text(station.radius_m);
+    let place = length.short(station.radius_m);
     let Some(departure) = station.departure_deg else { return format!("{place}: no departure") };
     let band = station.band_low_deg.zip(station.band_high_deg);
     let band = band.map_or_else(String::new, |(low, high)| {

@@ -54,6 +54,19 @@ impl Unit {
         fixed(self.of(si), self.decimals)
     }
 
+    /// The figure alone, without decimals once it has three places before them.
+    #[must_use]
+    pub fn short_figure(&self, si: f64) -> String {
+        let shown = self.of(si);
+        fixed(shown, if shown.abs() < 99.95 { self.decimals } else { 0 })
+    }
+
+    /// The short figure with the unit.
+    #[must_use]
+    pub fn short(&self, si: f64) -> String {
+        format!("{} {}", self.short_figure(si), self.name).trim_end().to_owned()
+    }
+
     /// The figure with the unit.
     #[must_use]
     pub fn text(&self, si: f64) -> String {
@@ -70,6 +83,8 @@ mod tests {
         assert_eq!(Unit::INCH.text(0.0254), "1.00 in");
         assert_eq!(Unit::MM.text(1.215), "1\u{202f}215 mm");
         assert_eq!(Unit::KM_H.text(10.0), "36 km/h");
+        let tenths = Unit { decimals: 1, ..Unit::MM };
+        assert_eq!((tenths.short(0.76), tenths.short(0.0755)), ("760 mm".to_owned(), "75.5 mm".to_owned()));
         assert!((Unit::KNOT.si(1.0) - 0.514_444_444).abs() < 1e-9);
         assert!((Unit::MPH.si(1.0) - 0.447_04).abs() < 1e-12);
     }

@@ -223,7 +223,11 @@ fn a_job_kept_that_cannot_be_read_is_said() {
 #[test]
 fn another_kind_of_setting_starts_from_what_the_point_runs_at() {
     let running = Running { rpm: Some(2641.3), power_w: Some(31_300.0) };
-    let set = |kind| start().after(Action::Choose(Choice::Setting(2, kind), running)).job().flight_points[2].setting.clone();
+    let set = |kind| {
+        start().after(Action::Choose(Choice::Setting(2, kind), running)).job().flight_points[2]
+            .setting
+            .clone()
+    };
     assert_eq!(set(SettingKind::Rpm), spokeshave::job::Setting::Rpm { rpm: 2641.0 });
     assert_eq!(set(SettingKind::Power), spokeshave::job::Setting::Power { power_w: 31_300.0 });
 }

@@ -72,8 +72,8 @@ fn words(props: &ReadingProps, [x, y]: [f64; 2]) -> [String; 2] {
     let frame = &props.frame;
     let (speed, radius) = (frame.speed().value(x), frame.axis.scale().value(y));
     let advance =
-        frame.advance_at(x).map_or_else(String::new, |a| format!(", {} per turn", props.length.text(a)));
-    let place = format!("{} at {}{advance}", props.length.text(radius), props.speed.text(speed));
+        frame.advance_at(x).map_or_else(String::new, |a| format!(", {} per turn", props.length.short(a)));
+    let place = format!("{} at {}{advance}", props.length.short(radius), props.speed.text(speed));
     [place, cell(&props.map, radius, speed).map_or_else(|| "no figure".to_owned(), figures)]
 }
 

@@ -16,7 +16,7 @@ pub(super) fn table(map: &DepartureMap, length: &Unit, speed: &Unit) -> Table {
             let stalled = if cell.past_stall_deg.is_some_and(|p| p > 0.0) { " stalled" } else { "" };
             AttrValue::from(signed_or_none(cell.departure_deg, 1) + stalled)
         });
-        std::iter::once(AttrValue::from(length.figure(map.radii_m[r]))).chain(cells).collect()
+        std::iter::once(AttrValue::from(length.short_figure(map.radii_m[r]))).chain(cells).collect()
     };
     Table {
         columns: std::iter::once(AttrValue::from(format!("radius, {}", length.name))).chain(heads).collect(),

@@ -50,7 +50,7 @@ fn tip_figure(layout: &Layout, props: &BladeRackProps, last_tick: Option<f64>) -
     html! {
         <g class="tick">
             <line x1={px(AXIS - 4.0)} x2={px(AXIS)} y1={px(y)} y2={px(y)} />
-            <text x={px(AXIS - 7.0)} y={px(y + 4.0)} text-anchor="end">{ props.length.figure(layout.axis.tip_m) }</text>
+            <text x={px(AXIS - 7.0)} y={px(y + 4.0)} text-anchor="end">{ props.length.short_figure(layout.axis.tip_m) }</text>
         </g>
     }
 }

@@ -69,7 +69,7 @@ pub fn StationCard(props: &StationCardProps) -> Html {
 fn header(props: &StationCardProps) -> Html {
     let s = &props.station;
     let place =
-        format!("{} from the centre, {} R", props.length.text(s.radius_m), fixed(s.radius_fraction, 2));
+        format!("{} from the centre, {} R", props.length.short(s.radius_m), fixed(s.radius_fraction, 2));
     let step = |to: Option<usize>, sign: &'static str, name: &'static str| {
         let select = props.on_select.clone();
         let onclick = Callback::from(move |_: MouseEvent| to.into_iter().for_each(|i| select.emit(i)));

@@ -92,14 +92,10 @@ pub(super) fn Section(props: &SectionProps) -> Html {
 }
 
 fn words(station: &StationResult, props: &SectionProps) -> String {
-    let size = props.length.of(station.chord_m);
-    let chord = fixed(size, if size < 100.0 { 1.max(props.length.decimals) } else { props.length.decimals });
+    let unit = Unit { decimals: props.length.decimals.max(1), ..props.length };
+    let chord = unit.short(station.chord_m);
     let outline = if props.outline.len() < 3 { ", outline not given" } else { "" };
-    format!(
-        "chord {chord} {}, {} % thick{outline}",
-        props.length.name,
-        fixed(100.0 * station.thickness_ratio, 0)
-    )
+    format!("chord {chord}, {} % thick{outline}", fixed(100.0 * station.thickness_ratio, 0))
 }
 
 fn plane(stand: &Stand, width: f64) -> Html {

@@ -26,8 +26,6 @@ fn open_space(layout: &Layout, props: &LineChartProps) -> Clear {
         clear.keep_off_points(dense(layout, series));
     }
     clear.keep_off_points(props.points.iter().map(|p| layout.place(p.at)));
-    let rings = props.handles.iter().map(|h| layout.place(h.at));
-    clear.keep_off_points(rings.flat_map(|[x, y]| [[x, y - 5.0], [x, y + 5.0]]));
     clear.keep_off_uprights(props.uprights.iter().filter(|u| u.chosen).map(|u| layout.x.px(u.x)));
     clear
 }

@@ -24,20 +24,16 @@ pub(super) struct Layout {
 }
 
 impl Layout {
-    /// The layout on a width; `held` keeps the span upwards.
-    pub(super) fn new(props: &LineChartProps, width: f64, held: Option<(f64, f64)>) -> Self {
+    pub(super) fn new(props: &LineChartProps, width: f64) -> Self {
         let (top, low) = (HEAD, (props.height - FOOT).max(HEAD + 20.0));
         let rows = most_on(low - top, 26.0);
         let along = || props.series.iter().flat_map(|s| s.points.iter().map(|p| p[0]));
         let up = || {
             let series = props.series.iter().flat_map(|s| s.points.iter().map(|p| p[1]));
-            series
-                .chain(props.limits.iter().map(|l| l.y))
-                .chain(props.points.iter().map(|p| p.at[1]))
-                .chain(props.handles.iter().map(|h| h.at[1]))
+            series.chain(props.limits.iter().map(|l| l.y)).chain(props.points.iter().map(|p| p.at[1]))
         };
         let x_span = span(&props.x, along(), false);
-        let y = Linear::new(held.unwrap_or_else(|| span(&props.y, up(), true)), (low, top));
+        let y = Linear::new(span(&props.y, up(), true), (low, top));
         let figures = placed(&y, &props.y.unit, rows);
         let longest = figures.iter().map(|(_, t)| t.label.chars().count()).max().unwrap_or(1);
         let left = LETTER * longest as f64 + 12.0;

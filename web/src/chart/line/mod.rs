@@ -1,6 +1,5 @@
 //! A line chart: curves with their names on them, points, limits, spans and upright flight points.
 
-mod handles;
 mod inside;
 mod labels;
 mod layout;
@@ -11,9 +10,6 @@ use super::axis::{bottom, left, most_on, placed, px};
 use super::figure::Figure;
 use super::unit::Unit;
 use super::width::use_width;
-pub use handles::{Grip, Handle};
-
-use handles::{Handles, HandlesProps};
 use layout::Layout;
 use reading::{Reading, ReadingProps};
 use yew::prelude::*;
@@ -130,15 +126,6 @@ pub struct LineChartProps {
     /// Spans.
     #[prop_or_default]
     pub spans: Vec<Span>,
-    /// Rings to drag.
-    #[prop_or_default]
-    pub handles: Vec<Handle>,
-    /// By how much a ring moves, SI.
-    #[prop_or_default]
-    pub step: f64,
-    /// Told what is done to the rings.
-    #[prop_or_default]
-    pub on_grip: Callback<Grip>,
     /// Height, pixels.
     #[prop_or(220.0)]
     pub height: f64,
@@ -148,23 +135,8 @@ pub struct LineChartProps {
 #[component]
 pub fn LineChart(props: &LineChartProps) -> Html {
     let (node, width) = use_width(340.0);
-    // While a ring is dragged the chart keeps its scale, so that the ring stays under the pointer.
-    let held = use_state_eq(|| None::<(f64, f64)>);
-    let layout = Layout::new(props, width, *held);
-    let on_grip = {
-        let (held, span, tell) = (held.setter(), layout.y.span(), props.on_grip.clone());
-        Callback::from(move |grip: Grip| {
-            match grip {
-                Grip::Grab(_) => held.set(Some(span)),
-                Grip::Drop(_) | Grip::Cancel(_) => held.set(None),
-                Grip::Move(..) | Grip::Nudge(..) => {}
-            }
-            tell.emit(grip);
-        })
-    };
-    let handles = HandlesProps::new(&layout, props.handles.clone(), props.step, on_grip);
+    let layout = Layout::new(props, width);
     let reading = ReadingProps::new(&layout, props.series.clone(), [props.x.clone(), props.y.clone()]);
-    let role = if props.handles.is_empty() { "img" } else { "group" };
     let table = {
         let (title, x, y, series) =
             (props.title.clone(), props.x.clone(), props.y.clone(), props.series.clone());
@@ -174,13 +146,12 @@ pub fn LineChart(props: &LineChartProps) -> Html {
         <Figure title={props.title.clone()} {table} class="line-figure">
             <div class="line-chart" ref={node}>
                 <svg width={px(width)} height={px(props.height)} viewBox={format!("0 0 {} {}", px(width), px(props.height))}
-                    {role} aria-label={description(props)}>
+                    role="img" aria-label={description(props)}>
                     { inside::inside(&layout, props) }
                     { axes(&layout, props) }
                     { labels::points(&layout, props) }
                     { labels::names(&layout, props) }
                     <Reading ..reading />
-                    <Handles ..handles />
                 </svg>
             </div>
         </Figure>
