@@ -15,6 +15,8 @@ pub enum Quantity {
     Height,
     /// Speed, m/s.
     Speed,
+    /// Rate of climb, m/s.
+    Climb,
     /// Force, N.
     Force,
     /// Force for each metre of radius, N/m.
@@ -171,6 +173,8 @@ impl Units {
             Quantity::Length => self.length.symbol(),
             Quantity::Height => self.height.symbol(),
             Quantity::Speed => self.speed.symbol(),
+            Quantity::Climb if self.height == HeightUnit::Foot => "ft/min",
+            Quantity::Climb => "m/s",
             Quantity::Force => self.force.symbol(),
             Quantity::Grading if self.force == ForceUnit::PoundForce => "lbf/ft",
             Quantity::Grading if self.force == ForceUnit::KilogramForce => "kgf/m",
@@ -214,6 +218,7 @@ impl Units {
             Quantity::Length if self.length == LengthUnit::Inch => 2,
             Quantity::Speed if self.speed == SpeedUnit::MetrePerSecond => 1,
             Quantity::Power if self.power != PowerUnit::Watt => 1,
+            Quantity::Climb if self.height == HeightUnit::Metre => 1,
             Quantity::Angle | Quantity::Temperature => 1,
             Quantity::Number => 3,
             _ => 0,
@@ -236,6 +241,8 @@ impl Units {
             Quantity::Length => length_m(self.length),
             Quantity::Height => height_m(self.height),
             Quantity::Speed => speed_m_s(self.speed),
+            Quantity::Climb if self.height == HeightUnit::Foot => height_m(HeightUnit::Foot) / 60.0,
+            Quantity::Climb => 1.0,
             Quantity::Force => force_n(self.force),
             Quantity::Grading if self.force == ForceUnit::PoundForce => {
                 force_n(self.force) / height_m(HeightUnit::Foot)

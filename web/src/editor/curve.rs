@@ -110,11 +110,13 @@ fn curve(frame: &Frame, line: &Line, i: usize) -> Html {
     let path = polyline(
         line.points.iter().filter(inside).map(|p| [frame.x.px(p[0]), frame.y.px(frame.y.held(p[1]))]),
     );
-    let at = line.points[line.points.len() * (2 + i) / 9];
+    // The first curve has its name below it, the second above.
+    let at = line.points[line.points.len() * (2 + 2 * i) / 9];
+    let off = if i == 0 { 24.0 } else { -10.0 };
     html! {
         <g aria-hidden="true">
             <path class="curve" d={path} />
-            <text class="haloed strong" x={px(frame.x.px(at[0]))} y={px(frame.y.px(at[1]) + 22.0)} text-anchor="middle">{ line.name }</text>
+            <text class="haloed strong" x={px(frame.x.px(at[0]))} y={px(frame.y.px(at[1]) + off)} text-anchor="middle">{ line.name }</text>
         </g>
     }
 }
@@ -133,7 +135,9 @@ fn rings(props: &DragCurveProps, hand: &Hand, measure: Measure, unit: Unit) -> H
         let value = measure.of(drawn)?;
         let (x, y) = (hand.frame.x.px(drawn.radius_m), hand.frame.y.px(hand.frame.y.held(value)));
         let chosen = i == props.selected;
-        let text = format!("{} {}", fixed(unit.of(value), unit.decimals.max(1)), unit.name);
+        let figure = fixed(unit.of(value), unit.decimals.max(1));
+        let text = format!("{figure} {}", unit.name);
+        let written = if measure == Measure::Angle { format!("{figure}°") } else { figure };
         Some(html! {
             <g key={i} class={classes!("ring", chosen.then_some("is-chosen"))} role="slider" tabindex={if chosen { "0" } else { "-1" }}
                 aria-label={format!("{} at station {}", capital(measure.name()), i + 1)} aria-orientation="vertical"
@@ -143,7 +147,7 @@ fn rings(props: &DragCurveProps, hand: &Hand, measure: Measure, unit: Unit) -> H
                 onblur={hand.act.on(|_: FocusEvent| Action::EndRun)}>
                 <circle class="ring-reach" cx={px(x)} cy={px(y)} r="14" />
                 <circle class="ring-mark" cx={px(x)} cy={px(y)} r="5" />
-                if chosen { <text class="haloed strong" x={px(x)} y={px(y - 10.0)} text-anchor="middle">{ text }</text> }
+                if chosen { <text class="haloed strong" x={px(x)} y={px(y - 10.0)} text-anchor="middle">{ written }</text> }
             </g>
         })
     };
@@ -157,7 +161,7 @@ impl Hand {
             if e.button() != 0 {
                 return;
             }
-            if let Some(ring) = e.current_target().and_then(|t| t.dyn_into::<Element>().ok()) {
+            if let Some(ring) = e.target_dyn_into::<Element>() {
                 // Without capture the drag still works as long as the pointer stays on the ring.
                 let _ = ring.set_pointer_capture(e.pointer_id());
             }
@@ -221,7 +225,7 @@ impl Hand {
 
 /// Gives the focus to another ring of the same measure.
 fn focus_ring(event: &KeyboardEvent, to: usize) {
-    let ring = event.current_target().and_then(|t| t.dyn_into::<Element>().ok());
+    let ring = event.target_dyn_into::<Element>();
     let Some(label) = ring.as_ref().and_then(|r| r.get_attribute("aria-label")) else { return };
     let Some((name, _)) = label.rsplit_once(' ') else { return };
     let other = ring.and_then(|r| r.parent_element());

@@ -1,11 +1,11 @@
 //! The page's state and the one reducer that changes it. Nothing here touches the browser: texts and events come in as
 //! actions, and what has to be stored or computed is read off the state that comes out.
 
-mod choice;
-mod drag;
-mod entry;
-mod field;
-mod history;
+pub mod choice;
+pub mod drag;
+pub mod entry;
+pub mod field;
+pub mod history;
 #[cfg(test)]
 mod tests;
 

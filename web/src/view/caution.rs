@@ -7,7 +7,7 @@ pub fn standing_start() -> Html {
     html! {
         <aside class="caution">
             <b>{ "Before you act. " }</b>
-            { "A standing start is an estimate. Chock and tie the aircraft down, keep out of the disc plane, and run up only \
+            { "A standing start is an estimate. Tie the aircraft down, keep out of the disc plane, and run up only \
                what has been inspected and balanced. The engine maker's rpm limit comes before any figure here." }
         </aside>
     }

@@ -1,5 +1,7 @@
 //! The flight points as a group of radio buttons.
 
+use std::rc::Rc;
+
 use spokeshave::job::{FlightPoint, Setting};
 use spokeshave::result::{PointResult, State as Answer};
 use wasm_bindgen::JsCast;
@@ -16,6 +18,8 @@ use crate::units::{Quantity, Units};
 pub struct ChipsProps {
     /// The state.
     pub state: Seen,
+    /// Every flight point worked out; shorter until the later frame.
+    pub points: Vec<Rc<Option<PointResult>>>,
 }
 
 /// The flight points; arrows go from one to the next.
@@ -42,21 +46,22 @@ pub fn Chips(props: &ChipsProps) -> Html {
         html! {
             <button type="button" class="chip" role="radio" aria-checked={if on { "true" } else { "false" }}
                 tabindex={if on { "0" } else { "-1" }} onclick={act.on(move |_: MouseEvent| Action::SelectPoint(i))}>
-                <b>{ &point.name }</b><span>{ speed_words(state.units, point) }</span>
+                <b>{ &point.name }</b><span>{ speed_words(state.units, point, props.points.get(i)) }</span>
             </button>
         }
     });
     html! { <div class="chips" role="radiogroup" aria-label="Flight point" {onkeydown}>{ for chips }</div> }
 }
 
-fn speed_words(units: Units, point: &FlightPoint) -> String {
-    point
-        .airspeed_m_s
-        .map_or_else(|| "as fast as it goes".into(), |v| with_unit(units, Quantity::Speed, Some(v)))
+/// The airspeed given, else the one that came out.
+fn speed_words(units: Units, point: &FlightPoint, result: Option<&Rc<Option<PointResult>>>) -> String {
+    let came_out = result.and_then(|r| r.as_ref().as_ref()).and_then(|r| r.airspeed_m_s);
+    with_unit(units, Quantity::Speed, point.airspeed_m_s.or(came_out))
 }
 
 fn focus_sibling(event: &KeyboardEvent, to: usize) {
-    let group = event.current_target().and_then(|t| t.dyn_into::<web_sys::Element>().ok());
+    let chip = event.target().and_then(|t| t.dyn_into::<web_sys::Element>().ok());
+    let group = chip.and_then(|c| c.closest("[role=radiogroup]").ok().flatten());
     let chip = group.and_then(|g| g.children().item(u32::try_from(to).unwrap_or(0)));
     if let Some(chip) = chip.and_then(|c| c.dyn_into::<HtmlElement>().ok()) {
         // Fails only for an element that is gone.
@@ -85,7 +90,9 @@ fn setting_words(units: Units, point: &FlightPoint) -> String {
     }
 }
 
-fn air_words(units: Units, point: &FlightPoint) -> String {
+/// Height and temperature of a flight point.
+#[must_use]
+pub fn air_words(units: Units, point: &FlightPoint) -> String {
     let height = if point.altitude_m == 0.0 {
         " at sea level".into()
     } else {

@@ -70,6 +70,9 @@ pub struct EntryProps {
     /// Whether it is a text rather than a figure.
     #[prop_or_default]
     pub is_text: bool,
+    /// What stands in the empty box.
+    #[prop_or_default]
+    pub hint: AttrValue,
 }
 
 /// A bare box: its name is spoken, its message stands where the caller puts it.
@@ -89,7 +92,7 @@ pub fn Entry(props: &EntryProps) -> Html {
     let mode = if props.is_text { "text" } else { "decimal" };
     html! {
         <input type="text" inputmode={mode} class={classes!("entry", wrong.then_some("wrong"), props.class.clone())}
-            value={shown.text.clone()} aria-label={shown.name.clone()} autocomplete="off" spellcheck="false"
+            value={shown.text.clone()} placeholder={props.hint.clone()} aria-label={shown.name.clone()} autocomplete="off" spellcheck="false"
             aria-invalid={wrong.then_some("true")} aria-describedby={wrong.then(|| shown.message_id())}
             {oninput} {onchange} {onkeydown} />
     }

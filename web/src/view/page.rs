@@ -50,6 +50,7 @@ pub fn Page(props: &PageProps) -> Html {
                     <div class="work">
                         <Steps />
                         <section class="hero" id="departure" aria-label="Departure">
+                            <h2 class="unseen">{ "Departure" }</h2>
                             <MapReading ..props.clone() />
                             <StationReading ..props.clone() />
                         </section>

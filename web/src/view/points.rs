@@ -63,6 +63,8 @@ fn PointsHead(props: &PointsHeadProps) -> Html {
         ("Rpm", ""),
         ("Thrust", units.symbol(Quantity::Force)),
         ("Power", units.symbol(Quantity::Power)),
+        ("Of full", "%"),
+        ("Climb", units.symbol(Quantity::Climb)),
         ("Efficiency", ""),
         ("Advance ratio", ""),
         ("Tip Mach", ""),
@@ -104,7 +106,8 @@ fn PointRow(props: &PointRowProps) -> Html {
         <>
             <tr class={classes!((i == state.point).then_some("selected"))}>
                 <th scope="row"><Entry shown={boxes[0].clone()} is_text=true class="name" /></th>
-                { for boxes[1..4].iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
+                { for boxes[1..3].iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
+                <td><Entry shown={boxes[3].clone()} hint={top_speed(state.units, &props.result)} /></td>
                 <td><SettingPick index={i} point={point.clone()} result={props.result.clone()} /></td>
                 <td class="setting">{ setting_box(point, &boxes[4]) }</td>
                 <PointAnswer result={props.result.clone()} units={state.units} />
@@ -112,9 +115,17 @@ fn PointRow(props: &PointRowProps) -> Html {
                     <button type="button" class="icon" aria-label={format!("Remove {}", point.name)} onclick={remove}>{ "×" }</button>
                 </td>
             </tr>
-            if wrong { <tr class="messages"><td colspan="13">{ messages }</td></tr> }
+            if wrong { <tr class="messages"><td colspan="15">{ messages }</td></tr> }
         </>
     }
+}
+
+/// The airspeed that came out, for a box left empty.
+fn top_speed(units: Units, result: &Option<PointResult>) -> String {
+    result
+        .as_ref()
+        .and_then(|r| r.airspeed_m_s)
+        .map_or_else(String::new, |v| figure(units, Quantity::Speed, Some(v)))
 }
 
 fn setting_box(point: &FlightPoint, shown: &Shown) -> Html {
@@ -153,15 +164,17 @@ struct PointAnswerProps {
 
 #[component]
 fn PointAnswer(props: &PointAnswerProps) -> Html {
-    let Some(r) = &*props.result else { return html! { <td colspan="6"></td> } };
+    let Some(r) = &*props.result else { return html! { <td colspan="8"></td> } };
     if r.state != Answer::Ok {
-        return html! { <td colspan="6" class="state">{ r.state.sentence() }</td> };
+        return html! { <td colspan="8" class="state">{ r.state.sentence() }</td> };
     }
     let (units, f) = (props.units, &r.figures);
     let cells = [
         figure(units, Quantity::Rpm, r.rpm),
         figure(units, Quantity::Force, f.thrust_n),
         figure(units, Quantity::Power, f.power_w),
+        figure(units, Quantity::Share, r.meeting.power_share),
+        figure(units, Quantity::Climb, r.meeting.rate_of_climb_m_s),
         fixed_or_none(f.efficiency, 3),
         fixed_or_none(f.advance_ratio, 3),
         fixed_or_none(f.tip_mach, 2),

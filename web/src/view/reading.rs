@@ -4,15 +4,17 @@ use std::rc::Rc;
 
 use spokeshave::job::Rotation;
 use spokeshave::result::{PointResult, StationResult};
+use spokeshave::rotor::DepartureMap;
 use spokeshave::section::library;
 use yew::prelude::*;
 
-use super::chips::{Chips, sentence};
+use super::chips::{Chips, air_words, sentence};
 use super::page::PageProps;
 use super::use_act;
 use crate::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
 };
+use crate::number::with_unit;
 use crate::state::Action;
 use crate::units::Quantity;
 
@@ -48,7 +50,7 @@ pub fn Lying(props: &PageProps) -> Html {
     let act = use_act();
     html! {
         <div class="lying">
-            <Chips state={props.state.clone()} />
+            <Chips state={props.state.clone()} points={props.later.points.clone()} />
             { blade(props, true, &act.on(Action::SelectStation)) }
         </div>
     }
@@ -60,7 +62,7 @@ fn Chosen(props: &PageProps) -> Html {
     let point = state.job().flight_points.get(state.point);
     html! {
         <>
-            <Chips state={state.clone()} />
+            <Chips state={state.clone()} points={props.later.points.clone()} />
             <p class="point-note">{ point.map(|p| sentence(state.units, p, (*props.now.point).as_ref())) }</p>
         </>
     }
@@ -97,13 +99,19 @@ pub fn MapReading(props: &PageProps) -> Html {
     let narrow = super::room::use_room() == super::room::Room::Narrow;
     let map = use_memo(later.map.clone(), |map| map.as_ref().clone().map(Rc::new));
     let Some(map) = (*map).clone() else {
-        return html! { <div class="map-place">{ no_answer(props) }</div> };
+        let answered = props.now.point.as_ref().as_ref().is_some_and(|r| r.rpm.is_some());
+        let words = if answered {
+            html! {}
+        } else {
+            no_answer(props)
+        };
+        return html! { <div class="map-place map-waiting" aria-busy={answered.then_some("true")}>{ words }</div> };
     };
     let stations = stations(props).iter().map(|s| (s.radius_m, s.departure_deg)).collect::<Vec<_>>();
     html! {
         <div class="map-place">
-            <DepartureChart {map} axis={axis(props)} marks={marks(props)} {stations} selected={state.station}
-                length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)} note={map_note(props)}
+            <DepartureChart map={map.clone()} axis={axis(props)} marks={marks(props)} {stations} selected={state.station}
+                length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)} note={map_note(props, &map)}
                 radius_figures={narrow} on_station={act.on(Action::SelectStation)} on_mark={act.on(Action::SelectPoint)} />
         </div>
     }
@@ -122,10 +130,17 @@ fn marks(props: &PageProps) -> Vec<FlightMark> {
         .collect()
 }
 
-fn map_note(props: &PageProps) -> String {
+/// What the map was worked out along: full throttle where the rpm follows the speed, else one rpm.
+fn map_note(props: &PageProps, map: &DepartureMap) -> String {
     let state = &props.state;
-    let name = state.job().flight_points.get(state.point).map_or("", |p| p.name.as_str());
-    format!("in the air of {name}; each mark stands where the blade makes that advance per turn")
+    let (low, high) = map.rpm.iter().fold((f64::INFINITY, 0.0_f64), |(a, b), r| (a.min(*r), b.max(*r)));
+    let along = if high - low > 0.5 {
+        "full throttle".to_string()
+    } else {
+        format!("at {}", with_unit(state.units, Quantity::Rpm, Some(high)))
+    };
+    let air = state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
+    format!("{along}{air}; each mark stands where the blade makes that advance per turn")
 }
 
 /// The station selected, in detail.
