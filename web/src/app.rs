@@ -12,9 +12,9 @@ use spokeshave::rotor::{CurvePoint, DepartureMap};
 use wasm_bindgen::JsCast;
 use yew::prelude::*;
 
-use crate::effect::after_frame::{Waiting, after_frame};
 use crate::effect::remembered::Remembered;
 use crate::effect::{keys, theme};
+use crate::later::{Plan, Work};
 use crate::results::Results;
 use crate::state::{Action, State};
 use crate::view::page::Page;
@@ -80,12 +80,24 @@ impl PartialEq for RigRef {
 /// What follows in a later frame.
 #[derive(Clone, Debug, Default, PartialEq)]
 pub struct Later {
+    /// The job made ready, as it was when this was worked out.
+    pub rig: Option<RigRef>,
+    /// The flight point selected then.
+    pub point: usize,
     /// Every flight point, in order.
     pub points: Vec<Rc<Option<PointResult>>>,
     /// The departure map at the flight point selected.
     pub map: Rc<Option<DepartureMap>>,
     /// The coefficient curves there.
     pub curves: Rc<Vec<CurvePoint>>,
+}
+
+impl Later {
+    /// The flight point selected, worked out.
+    #[must_use]
+    pub fn selected(&self) -> Rc<Option<PointResult>> {
+        self.points.get(self.point).cloned().unwrap_or_default()
+    }
 }
 
 #[hook]
@@ -110,24 +122,13 @@ fn use_now(results: &Rc<RefCell<Results>>, state: &State) -> Rc<Now> {
 #[hook]
 fn use_later(results: &Rc<RefCell<Results>>, now: &Rc<Now>, state: &State) -> Rc<Later> {
     let later = use_state_eq(Rc::<Later>::default);
-    let waiting = use_mut_ref(|| None::<Waiting>);
+    let work = use_mut_ref(|| None::<Work>);
     let (results, setter, before) = (results.clone(), later.setter(), (*later).clone());
-    use_effect_with((now.clone(), state.point, state.drag.is_some()), move |(now, point, dragging)| {
-        let (job, point, dragging) = (now.job.clone(), *point, *dragging);
-        let points =
-            move |results: &mut Results| (0..job.0.flight_points.len()).map(|i| results.point(i)).collect();
+    let key = (now.job.clone(), state.point, state.drag.is_some());
+    use_effect_with(key, move |(job, point, dragging)| {
+        let plan = Plan { count: job.0.flight_points.len(), point: *point, dragging: *dragging };
         // Putting off the new work calls off the old.
-        *waiting.borrow_mut() = Some(after_frame(move || {
-            let mut results = results.borrow_mut();
-            let points: Vec<_> = points(&mut results);
-            let (map, curves) = if dragging {
-                (before.map.clone(), before.curves.clone())
-            } else {
-                (results.map(point), results.curves(point))
-            };
-            setter.set(Rc::new(Later { points, map, curves }));
-            keep::after_work();
-        }));
+        *work.borrow_mut() = Some(Work::begin(plan, results, before, setter));
     });
     (*later).clone()
 }
@@ -149,7 +150,7 @@ pub fn App() -> Html {
     use_effect_with(store.0.job().title.clone(), |title| theme::title(title));
     html! {
         <ContextProvider<view::Act> context={view::Act(act)}>
-            <Page state={view::Seen(Rc::new(store.0.clone()))} {now} {later} />
+            <Page state={view::Seen::new(Rc::new(store.0.clone()))} {now} {later} />
         </ContextProvider<view::Act>>
     }
 }

@@ -9,6 +9,7 @@ pub mod chart;
 pub mod editor;
 pub mod effect;
 pub mod keep;
+pub mod later;
 pub mod number;
 pub mod results;
 pub mod saved_page;

@@ -1,23 +1,16 @@
 //! A curve with rings: dragging, keys, and what a reader of the screen hears.
 
-use std::rc::Rc;
-
-use spokeshave::drawn::DrawnStation;
-use wasm_bindgen::JsCast;
-use web_sys::Element;
 use yew::prelude::*;
 
-use super::frame::Frame;
+use super::frame::{Frame, Spans};
 use super::lines::{Best, BestAt, Line};
-use super::pull::{Pull, pressed};
+use super::ring::{Hand, Ring};
 use crate::chart::axis::{bottom, left, most_on, placed, px, rows};
 use crate::chart::path::{polygon, polyline};
 use crate::chart::unit::Unit;
 use crate::chart::width::use_width;
 use crate::number::fixed;
-use crate::state::{Action, Measure};
-use crate::view::form::capital;
-use crate::view::{Act, use_act};
+use crate::state::Measure;
 
 /// Properties of [`DragCurve`].
 #[derive(Properties, PartialEq)]
@@ -27,22 +20,20 @@ pub struct DragCurveProps {
     /// What is measured, in which unit.
     pub what: AttrValue,
     /// What the rings move, one set of rings each.
-    pub measures: Vec<Measure>,
+    pub measures: &'static [Measure],
     /// The curves, one for each measure.
     pub lines: Vec<Line>,
     /// The best angles.
     #[prop_or_default]
     pub best: Best,
-    /// The stations as drawn.
-    pub drawn: Rc<Vec<DrawnStation>>,
-    /// The stations the axes are made for.
-    pub still: Rc<Vec<DrawnStation>>,
+    /// Radius (m) and figure (SI, or degrees) of each station, for each measure.
+    pub rings: Vec<Vec<[f64; 2]>>,
+    /// What the axes are made for.
+    pub spans: Spans,
     /// Unit of length.
     pub length: Unit,
     /// The station selected.
     pub selected: usize,
-    /// Whether one of its rings is held.
-    pub held: bool,
     /// Height, pixels.
     pub height: f64,
 }
@@ -51,11 +42,11 @@ pub struct DragCurveProps {
 #[component]
 pub fn DragCurve(props: &DragCurveProps) -> Html {
     let (node, width) = use_width(360.0);
-    let pull = use_mut_ref(|| None::<Pull>);
+    let pull = use_mut_ref(|| None::<super::pull::Pull>);
     let unit = if props.measures.contains(&Measure::Angle) { Unit::DEGREE } else { props.length };
-    let frame = Frame::new(&props.still, &props.measures, &props.best, unit, (width, props.height));
-    let hand = Hand { act: use_act(), pull, frame };
-    let rings = props.measures.iter().map(|&m| rings(props, &hand, m, unit));
+    let frame = Frame::new(props.spans, unit, (width, props.height));
+    let hand = Hand { pull, slope: frame.y.slope() };
+    let rings = props.measures.iter().zip(&props.rings).map(|(&m, at)| rings(props, &frame, &hand, m, at));
     html! {
         <figure class="drag-curve">
             <figcaption><b>{ &props.title }</b><span>{ format!(", {}", props.what) }</span></figcaption>
@@ -121,118 +112,15 @@ fn curve(frame: &Frame, line: &Line, i: usize) -> Html {
     }
 }
 
-/// What moves the rings.
-#[derive(Clone)]
-struct Hand {
-    act: Act,
-    pull: Rc<std::cell::RefCell<Option<Pull>>>,
-    frame: Frame,
-}
-
-fn rings(props: &DragCurveProps, hand: &Hand, measure: Measure, unit: Unit) -> Html {
-    let count = props.drawn.len();
-    let ring = |(i, drawn): (usize, &DrawnStation)| {
-        let value = measure.of(drawn)?;
-        let (x, y) = (hand.frame.x.px(drawn.radius_m), hand.frame.y.px(hand.frame.y.held(value)));
-        let chosen = i == props.selected;
+fn rings(props: &DragCurveProps, frame: &Frame, hand: &Hand, measure: Measure, at: &[[f64; 2]]) -> Html {
+    let unit = if measure == Measure::Angle { Unit::DEGREE } else { props.length };
+    let ring = |(i, &[radius, value]): (usize, &[f64; 2])| {
+        let place = [frame.x.px(radius), frame.y.px(frame.y.held(value))];
         let figure = fixed(unit.of(value), unit.decimals.max(1));
-        let text = format!("{figure} {}", unit.name);
-        let written = if measure == Measure::Angle { format!("{figure}°") } else { figure };
-        Some(html! {
-            <g key={i} class={classes!("ring", chosen.then_some("is-chosen"))} role="slider" tabindex={if chosen { "0" } else { "-1" }}
-                aria-label={format!("{} at station {}", capital(measure.name()), i + 1)} aria-orientation="vertical"
-                aria-valuenow={fixed(unit.of(value), 2).replace(['\u{202f}'], "").replace('\u{2212}', "-")} aria-valuetext={text.clone()}
-                onpointerdown={hand.taken(i, measure, value)} onpointermove={hand.moved()} onpointerup={hand.let_go()}
-                onpointercancel={hand.put_back()} onkeydown={hand.keys(i, measure, value, count)}
-                onblur={hand.act.on(|_: FocusEvent| Action::EndRun)}>
-                <circle class="ring-reach" cx={px(x)} cy={px(y)} r="14" />
-                <circle class="ring-mark" cx={px(x)} cy={px(y)} r="5" />
-                if chosen { <text class="haloed strong" x={px(x)} y={px(y - 10.0)} text-anchor="middle">{ written }</text> }
-            </g>
-        })
+        html! {
+            <Ring key={i} station={i} count={at.len()} {measure} {value} {place} chosen={i == props.selected} hand={hand.clone()}
+                shown={unit.of(value)} {figure} unit={unit.name} />
+        }
     };
-    props.drawn.iter().enumerate().filter_map(ring).collect()
-}
-
-impl Hand {
-    fn taken(&self, station: usize, measure: Measure, value: f64) -> Callback<PointerEvent> {
-        let (act, pull) = (self.act.clone(), self.pull.clone());
-        Callback::from(move |e: PointerEvent| {
-            if e.button() != 0 {
-                return;
-            }
-            if let Some(ring) = e.target_dyn_into::<Element>() {
-                // Without capture the drag still works as long as the pointer stays on the ring.
-                let _ = ring.set_pointer_capture(e.pointer_id());
-            }
-            *pull.borrow_mut() = Some(Pull { station, measure, y_px: f64::from(e.client_y()), value });
-            act.send(Action::Take(station, measure));
-        })
-    }
-
-    fn moved(&self) -> Callback<PointerEvent> {
-        let (act, pull, slope) = (self.act.clone(), self.pull.clone(), self.frame.y.slope());
-        Callback::from(move |e: PointerEvent| {
-            let mut pull = pull.borrow_mut();
-            let Some(held) = pull.as_mut() else { return };
-            let before = held.shown(e.shift_key());
-            *held = held.moved(f64::from(e.client_y()), slope, e.shift_key());
-            let value = held.shown(e.shift_key());
-            drop(pull);
-            if value != before {
-                act.send(Action::DragTo(value));
-            }
-        })
-    }
-
-    fn let_go(&self) -> Callback<PointerEvent> {
-        let (act, pull) = (self.act.clone(), self.pull.clone());
-        Callback::from(move |_: PointerEvent| {
-            if pull.borrow_mut().take().is_some() {
-                act.send(Action::LetGo);
-            }
-        })
-    }
-
-    fn put_back(&self) -> Callback<PointerEvent> {
-        let (act, pull) = (self.act.clone(), self.pull.clone());
-        Callback::from(move |_: PointerEvent| {
-            if pull.borrow_mut().take().is_some() {
-                act.send(Action::PutBack);
-            }
-        })
-    }
-
-    fn keys(&self, station: usize, measure: Measure, value: f64, count: usize) -> Callback<KeyboardEvent> {
-        let (act, pull) = (self.act.clone(), self.pull.clone());
-        Callback::from(move |e: KeyboardEvent| {
-            let action = match e.key().as_str() {
-                "ArrowUp" => Action::Nudge(station, measure, pressed(measure, value, true, e.shift_key())),
-                "ArrowDown" => Action::Nudge(station, measure, pressed(measure, value, false, e.shift_key())),
-                "ArrowRight" if station + 1 < count => Action::SelectStation(station + 1),
-                "ArrowLeft" if station > 0 => Action::SelectStation(station - 1),
-                "Escape" if pull.borrow_mut().take().is_some() => Action::PutBack,
-                _ => return,
-            };
-            e.prevent_default();
-            if let Action::SelectStation(to) = action {
-                focus_ring(&e, to);
-            }
-            act.send(action);
-        })
-    }
-}
-
-/// Gives the focus to another ring of the same measure.
-fn focus_ring(event: &KeyboardEvent, to: usize) {
-    let ring = event.target_dyn_into::<Element>();
-    let Some(label) = ring.as_ref().and_then(|r| r.get_attribute("aria-label")) else { return };
-    let Some((name, _)) = label.rsplit_once(' ') else { return };
-    let other = ring.and_then(|r| r.parent_element());
-    let other =
-        other.and_then(|p| p.query_selector(&format!("[aria-label=\"{name} {}\"]", to + 1)).ok().flatten());
-    if let Some(other) = other.and_then(|o| o.dyn_into::<web_sys::SvgElement>().ok()) {
-        // Fails only for an element that is gone.
-        let _ = other.focus();
-    }
+    html! { <g>{ for at.iter().enumerate().map(ring) }</g> }
 }

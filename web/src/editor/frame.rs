@@ -16,6 +16,24 @@ const FOOT: f64 = 34.0;
 /// How far past the drawn angles the best ones may stretch the axis, degrees.
 const MOST_BEST_DEG: f64 = 25.0;
 
+/// What the axes have to hold; it stands still while a ring is held.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Spans {
+    /// Radius of the first and the last station, m.
+    pub radius_m: (f64, f64),
+    /// Lowest and highest figure, SI or degrees.
+    pub figure: (f64, f64),
+}
+
+impl Spans {
+    /// Room for stations and their best angles.
+    #[must_use]
+    pub fn of(still: &[DrawnStation], measures: &[Measure], best: &Best) -> Self {
+        let radius_m = ends(still.iter().map(|d| d.radius_m));
+        Self { radius_m, figure: span(still, measures, best) }
+    }
+}
+
 /// The frame of a curve.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Frame {
@@ -34,22 +52,13 @@ pub struct Frame {
 }
 
 impl Frame {
-    /// A frame for stations that stand still, in a width and height.
+    /// A frame in a width and height, with round figures of the unit at its ends.
     #[must_use]
-    pub fn new(
-        still: &[DrawnStation],
-        measures: &[Measure],
-        best: &Best,
-        unit: Unit,
-        (width, height): (f64, f64),
-    ) -> Self {
-        let radii = still.iter().map(|d| d.radius_m);
-        let (inner, outer) = ends(radii);
+    pub fn new(spans: Spans, unit: Unit, (width, height): (f64, f64)) -> Self {
+        let (inner, outer) = spans.radius_m;
         let margin = 0.06 * (outer - inner);
         let (left, right) = (LEFT, (width - RIGHT).max(LEFT + 60.0));
-        let (low, high) = span(still, measures, best);
-        // Round figures in the unit shown.
-        let (low, high) = widened(unit.of(low), unit.of(high));
+        let (low, high) = widened(unit.of(spans.figure.0), unit.of(spans.figure.1));
         Self {
             x: Linear::new((inner - margin, outer + margin), (left, right)),
             y: Linear::new((unit.si(low), unit.si(high)), (height - FOOT, TOP)),
@@ -74,7 +83,7 @@ fn span(still: &[DrawnStation], measures: &[Measure], best: &Best) -> (f64, f64)
     }
     let near = best.points.iter().map(|b| b.angle_deg.clamp(low - MOST_BEST_DEG, high + MOST_BEST_DEG));
     let (low, high) = ends(drawn().chain(near));
-    (low - 3.0, high + 4.0)
+    ((low - 3.0).floor(), (high + 4.0).ceil())
 }
 
 #[cfg(test)]
@@ -85,7 +94,8 @@ mod tests {
     #[test]
     fn every_station_stands_inside_and_pixels_run_upward() {
         let still = drawn(State::started(None).job());
-        let frame = Frame::new(&still, &[Measure::Angle], &Best::default(), Unit::DEGREE, (380.0, 200.0));
+        let frame =
+            Frame::new(Spans::of(&still, &[Measure::Angle], &Best::default()), Unit::DEGREE, (380.0, 200.0));
         for d in &still {
             assert!((frame.left..=frame.right).contains(&frame.x.px(d.radius_m)));
             assert!((frame.top..=frame.low).contains(&frame.y.px(d.angle_deg)));

@@ -4,6 +4,7 @@ pub mod curve;
 pub mod frame;
 pub mod lines;
 pub mod pull;
+pub mod ring;
 
 use std::rc::Rc;
 
@@ -12,11 +13,12 @@ use spokeshave::result::PointResult;
 use yew::prelude::*;
 
 use crate::app::RigRef;
-use crate::state::{Action, Measure, drawn};
+use crate::state::{Action, Measure};
 use crate::units::Quantity;
 use crate::view::form::Pick;
 use crate::view::{Seen, use_act};
 use curve::DragCurve;
+use frame::Spans;
 use lines::{Best, best_angles, chord, thickness, twist};
 
 /// Properties of [`Curves`].
@@ -32,35 +34,47 @@ pub struct CurvesProps {
     pub rig: Option<RigRef>,
 }
 
+const ANGLE: &[Measure] = &[Measure::Angle];
+const WOOD: &[Measure] = &[Measure::Chord, Measure::Thickness];
+
 /// The curves and how far neighbours follow.
 #[component]
 pub fn Curves(props: &CurvesProps) -> Html {
+    let spans = use_mut_ref(|| None::<[Spans; 2]>);
     let Some(rig) = &props.rig else { return html! {} };
     let (state, blade) = (&props.state, &rig.0.rotor.blade);
+    let best = best(props);
     // While a ring is held the axes stand still, or the ring would run from the pointer.
-    let start = state.drag.as_ref().map(|d| Rc::new(drawn(&d.start)));
-    let still = start.unwrap_or_else(|| props.drawn.clone());
+    let held = if state.drag.is_some() { *spans.borrow() } else { None };
+    let now = held.unwrap_or_else(|| {
+        [Spans::of(&props.drawn, ANGLE, &best), Spans::of(&props.drawn, WOOD, &Best::default())]
+    });
+    *spans.borrow_mut() = Some(now);
     let length = state.units.unit(Quantity::Length);
-    let name = state.job().flight_points.get(state.point).map_or("", |p| p.name.as_str());
-    let best = Best {
-        name: format!("best at {name}, and its working band"),
-        points: best_angles(&props.drawn, &props.point),
-    };
     html! {
         <div class="curves">
-            <DragCurve title="Blade angle" what="degrees to the chord line" measures={vec![Measure::Angle]}
-                lines={vec![twist(blade)]} best={best} drawn={props.drawn.clone()} still={still.clone()}
-                length={length} selected={state.station} held={held(state, &[Measure::Angle])} height={196.0} />
-            <DragCurve title="Chord and thickness" what={length.name} measures={vec![Measure::Chord, Measure::Thickness]}
-                lines={vec![chord(blade), thickness(blade)]} drawn={props.drawn.clone()} {still}
-                length={length} selected={state.station} held={held(state, &[Measure::Chord, Measure::Thickness])} height={176.0} />
+            <DragCurve title="Blade angle" what="degrees to the chord line" measures={ANGLE} lines={vec![twist(blade)]} {best}
+                rings={rings(&props.drawn, ANGLE)} spans={now[0]} {length} selected={state.station} height={196.0} />
+            <DragCurve title="Chord and thickness" what={length.name} measures={WOOD} lines={vec![chord(blade), thickness(blade)]}
+                rings={rings(&props.drawn, WOOD)} spans={now[1]} {length} selected={state.station} height={176.0} />
             <Follow span={state.follow} />
         </div>
     }
 }
 
-fn held(state: &Seen, measures: &[Measure]) -> bool {
-    state.drag.as_ref().is_some_and(|d| measures.contains(&d.measure))
+fn best(props: &CurvesProps) -> Best {
+    let state = &props.state;
+    let name = state.job().flight_points.get(state.point).map_or("", |p| p.name.as_str());
+    Best {
+        name: format!("best at {name}, and its working band"),
+        points: best_angles(&props.drawn, &props.point),
+    }
+}
+
+/// Radius and figure of each station, for each measure.
+fn rings(drawn: &[DrawnStation], measures: &[Measure]) -> Vec<Vec<[f64; 2]>> {
+    let of = |m: &Measure| drawn.iter().filter_map(|d| Some([d.radius_m, m.of(d)?])).collect();
+    measures.iter().map(of).collect()
 }
 
 #[derive(Properties, PartialEq)]

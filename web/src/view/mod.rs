@@ -48,19 +48,36 @@ pub fn use_act() -> Act {
     use_context::<Act>().unwrap_or_else(|| Act(Callback::noop()))
 }
 
-/// The state as seen in one frame; compared by identity.
+/// The state as seen in one frame by a part of the page: equal to another as long as what that part shows is.
 #[derive(Clone, Debug)]
-pub struct Seen(pub Rc<State>);
+pub struct Seen {
+    state: Rc<State>,
+    same: fn(&State, &State) -> bool,
+}
+
+impl Seen {
+    /// The whole state; any action makes another.
+    #[must_use]
+    pub fn new(state: Rc<State>) -> Self {
+        Self { state, same: |_, _| false }
+    }
+
+    /// The state as a part sees it that shows the same while `same` holds.
+    #[must_use]
+    pub fn part(&self, same: fn(&State, &State) -> bool) -> Self {
+        Self { state: self.state.clone(), same }
+    }
+}
 
 impl PartialEq for Seen {
     fn eq(&self, other: &Self) -> bool {
-        Rc::ptr_eq(&self.0, &other.0)
+        Rc::ptr_eq(&self.state, &other.state) || (self.same)(&self.state, &other.state)
     }
 }
 
 impl std::ops::Deref for Seen {
     type Target = State;
     fn deref(&self) -> &State {
-        &self.0
+        &self.state
     }
 }

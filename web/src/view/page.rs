@@ -20,6 +20,7 @@ use crate::app::{Later, Now};
 use crate::chart::hatch::Hatches;
 use crate::editor::Curves;
 use crate::number::{NO_FIGURE, fixed};
+use crate::state::State;
 
 /// Properties of [`Page`].
 #[derive(Properties, PartialEq)]
@@ -84,26 +85,70 @@ fn Panels(props: &PageProps) -> Html {
     html! {
         <>
             <Panel id="points" number={1} title="Flight points" open={*open}
-                result={format!("{} points, {answered} with an answer", job.flight_points.len())}>
-                <Points state={state.clone()} results={later.points.clone()} />
+                result={points_line(job.flight_points.len(), answered, later.points.len())}>
+                <Points state={state.part(same_points)} results={later.points.clone()} />
             </Panel>
             <Panel id="blade" number={2} title="Blade" result={in_a_line(job, state.units)} open={*open}>
-                <BladeSettings state={state.clone()} />
+                <BladeSettings state={state.part(same_settings)} />
                 <div class="blade-grid">
                     <div class="blade-table">
-                        <StationTable state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} points={later.points.clone()} />
+                        <StationTable state={state.part(same_table)} drawn={now.drawn.clone()} point={now.point.clone()} points={later.points.clone()} />
                     </div>
                     <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} />
                 </div>
             </Panel>
             <Panel id="coefficients" number={3} title="Coefficients" open={*open}
                 result={coefficients::in_a_line((*now.point).as_ref())}>
-                <Coefficients curves={later.curves.clone()} point={now.point.clone()} units={state.units} />
+                <Coefficients curves={later.curves.clone()} point={later.selected()} units={state.units} />
             </Panel>
             <Panel id="method" number={4} title="How it is computed" result={method_line(props)} open={*open}>
-                <MethodPanel state={state.clone()} rig={now.rig.clone()} point={now.point.clone()} />
+                <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>
+    }
+}
+
+fn same_points(a: &State, b: &State) -> bool {
+    a.job().flight_points == b.job().flight_points
+        && a.drafts == b.drafts
+        && a.point == b.point
+        && a.units == b.units
+}
+
+fn same_table(a: &State, b: &State) -> bool {
+    a.job().propeller == b.job().propeller
+        && a.job().sections == b.job().sections
+        && a.job().flight_points == b.job().flight_points
+        && a.drafts == b.drafts
+        && (a.point, a.station, a.units) == (b.point, b.station, b.units)
+}
+
+fn same_settings(a: &State, b: &State) -> bool {
+    let (p, q) = (&a.job().propeller, &b.job().propeller);
+    let sections =
+        |s: &State| s.job().propeller.stations.iter().map(|s| s.section.clone()).collect::<Vec<_>>();
+    p.blades == q.blades
+        && p.diameter_m == q.diameter_m
+        && p.hub_diameter_m == q.hub_diameter_m
+        && p.rotation == q.rotation
+        && p.pitch_control == q.pitch_control
+        && p.angle_reference == q.angle_reference
+        && a.job().sections == b.job().sections
+        && sections(a) == sections(b)
+        && a.drafts == b.drafts
+        && a.units == b.units
+}
+
+fn same_method(a: &State, b: &State) -> bool {
+    a.job().method == b.job().method && a.drafts == b.drafts && a.units == b.units
+}
+
+fn points_line(count: usize, answered: usize, worked_out: usize) -> String {
+    let points = if count == 1 { "1 point".into() } else { format!("{count} points") };
+    if worked_out < count || answered == count {
+        points
+    } else {
+        format!("{points}, {} without an answer", count - answered)
     }
 }
 

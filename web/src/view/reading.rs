@@ -10,20 +10,22 @@ use yew::prelude::*;
 
 use super::chips::{Chips, air_words, sentence};
 use super::page::PageProps;
-use super::use_act;
+use super::room::{Room, use_room};
+use super::{Seen, use_act};
+use crate::app::Later;
 use crate::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
 };
 use crate::number::with_unit;
-use crate::state::Action;
+use crate::state::{Action, State};
 use crate::units::Quantity;
 
 /// Length of the radius axis, pixels.
 const AXIS_PX: f64 = 440.0;
 
 /// The radius axis of the job's blade.
-fn axis(props: &PageProps) -> RadiusAxis {
-    let p = &props.state.job().propeller;
+fn axis(state: &State) -> RadiusAxis {
+    let p = &state.job().propeller;
     RadiusAxis::new(p.hub_diameter_m / 2.0, p.diameter_m / 2.0, AXIS_PX)
 }
 
@@ -50,10 +52,14 @@ pub fn Lying(props: &PageProps) -> Html {
     let act = use_act();
     html! {
         <div class="lying">
-            <Chips state={props.state.clone()} points={props.later.points.clone()} />
+            <Chips state={props.state.part(same_chips)} points={props.later.points.clone()} />
             { blade(props, true, &act.on(Action::SelectStation)) }
         </div>
     }
+}
+
+fn same_chips(a: &State, b: &State) -> bool {
+    a.job().flight_points == b.job().flight_points && (a.point, a.units) == (b.point, b.units)
 }
 
 #[component]
@@ -62,7 +68,7 @@ fn Chosen(props: &PageProps) -> Html {
     let point = state.job().flight_points.get(state.point);
     html! {
         <>
-            <Chips state={state.clone()} points={props.later.points.clone()} />
+            <Chips state={state.part(same_chips)} points={props.later.points.clone()} />
             <p class="point-note">{ point.map(|p| sentence(state.units, p, (*props.now.point).as_ref())) }</p>
         </>
     }
@@ -82,7 +88,7 @@ fn blade(props: &PageProps, lying: bool, on_select: &Callback<usize>) -> Html {
     }
     let leading_right = state.job().propeller.rotation == Rotation::ClockwiseFromBehind;
     html! {
-        <BladeRack {shape} {stations} axis={axis(props)} {length} {selected} {leading_right} on_select={on_select.clone()} />
+        <BladeRack {shape} {stations} axis={axis(state)} {length} {selected} {leading_right} on_select={on_select.clone()} />
     }
 }
 
@@ -94,30 +100,56 @@ fn no_answer(props: &PageProps) -> Html {
 /// The departure map, or why there is none.
 #[component]
 pub fn MapReading(props: &PageProps) -> Html {
+    let answered = props.now.point.as_ref().as_ref().is_some_and(|r| r.rpm.is_some());
+    let map = use_memo(props.later.map.clone(), |map| map.as_ref().clone().map(Rc::new));
+    match (*map).clone() {
+        Some(map) if answered => {
+            html! { <MapFigure state={props.state.part(same_map)} later={props.later.clone()} {map} /> }
+        }
+        _ => {
+            let words = if answered {
+                html! {}
+            } else {
+                no_answer(props)
+            };
+            html! { <div class="map-place map-waiting" aria-busy={answered.then_some("true")}>{ words }</div> }
+        }
+    }
+}
+
+fn same_map(a: &State, b: &State) -> bool {
+    let (p, q) = (&a.job().propeller, &b.job().propeller);
+    p.diameter_m == q.diameter_m
+        && p.hub_diameter_m == q.hub_diameter_m
+        && a.job().flight_points == b.job().flight_points
+        && (a.point, a.station, a.units) == (b.point, b.station, b.units)
+}
+
+#[derive(Properties, PartialEq)]
+struct MapFigureProps {
+    state: Seen,
+    later: Rc<Later>,
+    map: Rc<DepartureMap>,
+}
+
+#[component]
+fn MapFigure(props: &MapFigureProps) -> Html {
     let act = use_act();
-    let (state, later) = (&props.state, &props.later);
-    let narrow = super::room::use_room() == super::room::Room::Narrow;
-    let map = use_memo(later.map.clone(), |map| map.as_ref().clone().map(Rc::new));
-    let Some(map) = (*map).clone() else {
-        let answered = props.now.point.as_ref().as_ref().is_some_and(|r| r.rpm.is_some());
-        let words = if answered {
-            html! {}
-        } else {
-            no_answer(props)
-        };
-        return html! { <div class="map-place map-waiting" aria-busy={answered.then_some("true")}>{ words }</div> };
-    };
-    let stations = stations(props).iter().map(|s| (s.radius_m, s.departure_deg)).collect::<Vec<_>>();
+    let state = &props.state;
+    let narrow = use_room() == Room::Narrow;
+    let selected = props.later.selected();
+    let stations = selected.iter().flat_map(|r| &r.stations).map(|s| (s.radius_m, s.departure_deg));
     html! {
         <div class="map-place">
-            <DepartureChart map={map.clone()} axis={axis(props)} marks={marks(props)} {stations} selected={state.station}
-                length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)} note={map_note(props, &map)}
-                radius_figures={narrow} on_station={act.on(Action::SelectStation)} on_mark={act.on(Action::SelectPoint)} />
+            <DepartureChart map={props.map.clone()} axis={axis(state)} marks={marks(props)} stations={stations.collect::<Vec<_>>()}
+                selected={state.station} length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
+                note={map_note(props)} radius_figures={narrow} on_station={act.on(Action::SelectStation)}
+                on_mark={act.on(Action::SelectPoint)} />
         </div>
     }
 }
 
-fn marks(props: &PageProps) -> Vec<FlightMark> {
+fn marks(props: &MapFigureProps) -> Vec<FlightMark> {
     let (state, later) = (&props.state, &props.later);
     let points = state.job().flight_points.iter().enumerate();
     let advance = |r: Option<&PointResult>| r.and_then(|r| r.figures.effective_pitch_m);
@@ -131,15 +163,16 @@ fn marks(props: &PageProps) -> Vec<FlightMark> {
 }
 
 /// What the map was worked out along: full throttle where the rpm follows the speed, else one rpm.
-fn map_note(props: &PageProps, map: &DepartureMap) -> String {
-    let state = &props.state;
+fn map_note(props: &MapFigureProps) -> String {
+    let (state, map) = (&props.state, &props.map);
     let (low, high) = map.rpm.iter().fold((f64::INFINITY, 0.0_f64), |(a, b), r| (a.min(*r), b.max(*r)));
     let along = if high - low > 0.5 {
         "full throttle".to_string()
     } else {
         format!("at {}", with_unit(state.units, Quantity::Rpm, Some(high)))
     };
-    let air = state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
+    let air =
+        state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
     format!("{along}{air}; each mark stands where the blade makes that advance per turn")
 }
 

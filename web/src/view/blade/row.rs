@@ -52,10 +52,9 @@ pub fn StationRow(props: &StationRowProps) -> Html {
                         aria-label={format!("Station {}", i + 1)}
                         onclick={act.on(move |_: MouseEvent| Action::SelectStation(i))}>{ i + 1 }</button>
                 </th>
-                { for boxes.iter().map(box_cell) }
+                <BoxCells boxes={boxes.clone()} />
                 if columns.sections { <td><SectionPick index={i} state={state.clone()} /></td> }
-                { for departure_cells(props) }
-                <td class="wide-only figure-cell">{ signed_or_none(props.now.map(|d| -d), 1) }</td>
+                <DepartureCells points={columns.points.clone()} departures={props.departures.clone()} point={state.point} now={props.now} />
             </tr>
             if !wrong.is_empty() { <tr class="messages"><td colspan="16">{ messages }</td></tr> }
         </>
@@ -82,18 +81,43 @@ fn measures(face: bool) -> &'static [Measure] {
     if face { &WITH_FACE } else { &ALL[..5] }
 }
 
+#[derive(Properties, PartialEq)]
+struct BoxCellsProps {
+    boxes: Vec<Shown>,
+}
+
+/// Apart from the departures, so that boxes whose figure stays are left alone.
+#[component]
+fn BoxCells(props: &BoxCellsProps) -> Html {
+    html! { <>{ for props.boxes.iter().map(box_cell) }</> }
+}
+
 fn box_cell(shown: &Shown) -> Html {
     let narrow = matches!(shown.field, Field::Station(_, Measure::Pitch));
     html! { <td class={narrow.then_some("wide-only")}><Entry shown={shown.clone()} /></td> }
 }
 
-fn departure_cells(props: &StationRowProps) -> Vec<Html> {
-    let point = props.state.point;
+#[derive(Properties, PartialEq)]
+struct DepartureCellsProps {
+    points: Vec<usize>,
+    departures: Vec<Option<f64>>,
+    point: usize,
+    now: Option<f64>,
+}
+
+/// The departure at each flight point, and how far the blade would be turned to its best.
+#[component]
+fn DepartureCells(props: &DepartureCellsProps) -> Html {
     let cell = |(&p, &d): (&usize, &Option<f64>)| {
-        let class = classes!(point_class(p == point), style(d));
+        let class = classes!(point_class(p == props.point), style(d));
         html! { <td {class}>{ signed_or_none(d, 1) }</td> }
     };
-    props.columns.points.iter().zip(&props.departures).map(cell).collect()
+    html! {
+        <>
+            { for props.points.iter().zip(&props.departures).map(cell) }
+            <td class="wide-only figure-cell">{ signed_or_none(props.now.map(|d| -d), 1) }</td>
+        </>
+    }
 }
 
 #[derive(Properties, PartialEq)]

@@ -1,0 +1,132 @@
+//! Work that follows an edit in later frames, a piece at a time so that the page stays at hand: the other flight points
+//! first, then, unless something is being dragged, the curves and the map.
+
+use std::cell::RefCell;
+use std::rc::Rc;
+
+use gloo_timers::callback::Timeout;
+use yew::UseStateSetter;
+
+use crate::app::{Later, RigRef};
+use crate::effect::after_frame::{Waiting, after_frame};
+use crate::keep;
+use crate::results::Results;
+
+/// What has to be worked out.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub struct Plan {
+    /// Number of flight points.
+    pub count: usize,
+    /// The one selected.
+    pub point: usize,
+    /// Whether something is being dragged: then the map and the curves stay as they are.
+    pub dragging: bool,
+}
+
+/// A piece of the work.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Piece {
+    /// A flight point.
+    Point(usize),
+    /// The coefficient curves.
+    Curves,
+    /// The departure map.
+    Map,
+    /// Showing what has been worked out so far.
+    Show,
+}
+
+impl Plan {
+    /// The pieces in order.
+    #[must_use]
+    pub fn pieces(self) -> Vec<Piece> {
+        let mut pieces: Vec<Piece> = (0..self.count).map(Piece::Point).collect();
+        pieces.push(Piece::Show);
+        if !self.dragging {
+            pieces.extend([Piece::Map, Piece::Curves, Piece::Show]);
+        }
+        pieces
+    }
+}
+
+/// Work going on; dropping it calls it off.
+#[derive(Debug)]
+pub struct Work {
+    _waiting: Waiting,
+    _next: Rc<RefCell<Option<Timeout>>>,
+}
+
+/// What the pieces need.
+struct Bench {
+    plan: Plan,
+    results: Rc<RefCell<Results>>,
+    before: Rc<Later>,
+    setter: UseStateSetter<Rc<Later>>,
+    next: std::rc::Weak<RefCell<Option<Timeout>>>,
+}
+
+impl Work {
+    /// Begins after the next frame has been drawn.
+    #[must_use]
+    pub fn begin(
+        plan: Plan,
+        results: Rc<RefCell<Results>>,
+        before: Rc<Later>,
+        setter: UseStateSetter<Rc<Later>>,
+    ) -> Self {
+        let next = Rc::new(RefCell::new(None));
+        let bench = Rc::new(Bench { plan, results, before, setter, next: Rc::downgrade(&next) });
+        let waiting = after_frame(move || run(&bench, plan.pieces(), 0));
+        Self { _waiting: waiting, _next: next }
+    }
+}
+
+/// One piece now, the others each in a turn of its own.
+fn run(bench: &Rc<Bench>, pieces: Vec<Piece>, i: usize) {
+    let Some(&piece) = pieces.get(i) else { return keep::after_work() };
+    bench.work(piece, i + 1 == pieces.len());
+    let (again, next) = (bench.clone(), bench.next.upgrade());
+    if let Some(next) = next {
+        *next.borrow_mut() = Some(Timeout::new(0, move || run(&again, pieces, i + 1)));
+    }
+}
+
+impl Bench {
+    fn work(&self, piece: Piece, last: bool) {
+        let mut results = self.results.borrow_mut();
+        match piece {
+            Piece::Point(i) => drop(results.point(i)),
+            Piece::Curves => drop(results.curves(self.plan.point)),
+            Piece::Map => drop(results.map(self.plan.point)),
+            Piece::Show => {
+                let later = self.shown(&mut results, last && !self.plan.dragging);
+                drop(results);
+                self.setter.set(Rc::new(later));
+            }
+        }
+    }
+
+    /// All that has been worked out; what has not stays as it was before.
+    fn shown(&self, results: &mut Results, whole: bool) -> Later {
+        let point = self.plan.point;
+        let points = (0..self.plan.count).map(|i| results.point(i)).collect();
+        let rig = results.rig().map(RigRef);
+        if whole {
+            return Later { rig, point, points, map: results.map(point), curves: results.curves(point) };
+        }
+        Later { rig, point, points, map: self.before.map.clone(), curves: self.before.curves.clone() }
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn the_map_waits_until_a_drag_is_over() {
+        let plan = Plan { count: 2, point: 0, dragging: true };
+        assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Show]);
+        let all = Plan { dragging: false, ..plan }.pieces();
+        assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::Show]);
+    }
+}
