@@ -84,7 +84,7 @@ fn name(placed: &Placed) -> String {
 fn line(frame: &Frame, placed: &Placed, middle: f64, size: f64) -> Html {
     let (x, top) = (px(placed.x), frame.axis.top_px);
     // Straight down where the name stands over the line, slanting where others have pushed it aside.
-    let half = 0.5 * size - 8.0;
+    let half = 0.5 * size - 6.0;
     let start = placed.x.clamp(middle - half, middle + half);
     let lead = format!("M{} {}L{x} {}", px(start), px(top - 12.0), px(top));
     if placed.past {

@@ -57,7 +57,7 @@ pub fn StationCard(props: &StationCardProps) -> Html {
                 speed={props.speed} {width} />
             <div class="station-two">
                 <section::Section station={station.clone()} outline={props.outline.clone()} length={props.length}
-                    width={(0.56 * width).floor()} />
+                    width={(0.55 * width - 6.0).floor()} />
                 { ledger::ledger(station) }
             </div>
             <lift_drag::LiftDrag station={station.clone()} curve={props.lift_to_drag.clone()} />

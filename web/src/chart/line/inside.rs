@@ -26,8 +26,8 @@ pub(super) fn inside(layout: &Layout, props: &LineChartProps) -> Html {
     };
     html! {
         <svg x={x.clone()} y={y.clone()} width={w.clone()} height={h.clone()} viewBox={format!("{x} {y} {w} {h}")} aria-hidden="true">
-            { for props.spans.iter().map(|s| span(layout, s)) }
             { rows(&placed(&layout.y, &props.y.unit, layout.rows), layout.left, layout.right) }
+            { for props.spans.iter().map(|s| span(layout, s)) }
             if layout.y.holds(0.0) {
                 <line class="zero" x1={px(layout.left)} x2={px(layout.right)} y1={px(layout.y.px(0.0))} y2={px(layout.y.px(0.0))} />
             }
