@@ -183,24 +183,34 @@ pub fn StationReading(props: &PageProps) -> Html {
     let (state, now) = (&props.state, &props.now);
     let i = state.station;
     let result = now.point.as_ref().as_ref().filter(|r| !r.stations.is_empty());
+    let thickness = result.and_then(|r| r.stations.get(i)).map_or(0.0, |s| s.thickness_ratio);
+    let outline = use_outline(shipped_section(props), thickness);
     let Some((point, station)) = result.and_then(|r| Some((r, r.stations.get(i)?))) else {
         return html! { <div class="detail">{ no_answer(props) }</div> };
     };
     html! {
         <div class="detail">
             <StationCard station={station.clone()} index={i} count={point.stations.len()} airspeed_m_s={point.airspeed_m_s}
-                rpm={point.rpm} outline={outline(props, station)} lift_to_drag={now.lift_to_drag.clone()}
+                rpm={point.rpm} {outline} lift_to_drag={now.lift_to_drag.clone()}
                 length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
                 on_select={act.on(Action::SelectStation)} />
         </div>
     }
 }
 
-/// The outline of the station's section; none for a section that the job brought as tables only.
-fn outline(props: &PageProps, station: &StationResult) -> Rc<Vec<[f64; 2]>> {
+/// Name of the station's section where it comes with the program; one that the job brought has tables only.
+fn shipped_section(props: &PageProps) -> Option<String> {
     let job = props.state.job();
-    let name = job.propeller.stations.get(props.state.station).map_or("", |s| s.section.as_str());
-    let own = job.sections.iter().any(|s| s.name == name);
-    let outline = if own { None } else { library().outline(name, station.thickness_ratio) };
-    Rc::new(outline.map_or_else(Vec::new, |o| o.points().to_vec()))
+    let name = &job.propeller.stations.get(props.state.station)?.section;
+    let own = job.sections.iter().any(|s| s.name == *name);
+    (!own).then(|| name.clone())
+}
+
+/// The outline of a section at a thickness, made anew only when one of the two changes.
+#[hook]
+fn use_outline(name: Option<String>, thickness_ratio: f64) -> Rc<Vec<[f64; 2]>> {
+    use_memo((name, thickness_ratio.to_bits()), move |(name, _)| {
+        let outline = name.as_ref().and_then(|name| library().outline(name, thickness_ratio));
+        outline.map_or_else(Vec::new, |o| o.points().to_vec())
+    })
 }
