@@ -230,6 +230,7 @@ impl Units {
     pub fn box_decimals(self, quantity: Quantity) -> usize {
         match quantity {
             Quantity::Length if self.length == LengthUnit::Millimetre => 1,
+            Quantity::Length => 3,
             Quantity::Number | Quantity::Temperature => 0,
             _ => self.decimals(quantity),
         }

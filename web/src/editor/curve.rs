@@ -45,6 +45,7 @@ pub fn DragCurve(props: &DragCurveProps) -> Html {
     let pull = use_mut_ref(|| None::<super::pull::Pull>);
     let unit = if props.measures.contains(&Measure::Angle) { Unit::DEGREE } else { props.length };
     let frame = Frame::new(props.spans, unit, (width, props.height));
+    let selected_m = props.rings.first().and_then(|r| r.get(props.selected)).map_or(0.0, |at| at[0]);
     let hand = Hand { pull, slope: frame.y.slope() };
     let rings = props.measures.iter().zip(&props.rings).map(|(&m, at)| rings(props, &frame, &hand, m, at));
     html! {
@@ -55,7 +56,7 @@ pub fn DragCurve(props: &DragCurveProps) -> Html {
                     role="group" aria-label={format!("{} over radius; each ring can be moved", props.title)}>
                     { axes(&frame, unit, props.length) }
                     { best(&frame, &props.best) }
-                    { for props.lines.iter().enumerate().map(|(i, line)| curve(&frame, line, i)) }
+                    { for props.lines.iter().enumerate().map(|(i, line)| curve(&frame, line, i, selected_m)) }
                     { for rings }
                 </svg>
             </div>
@@ -96,13 +97,16 @@ fn best(frame: &Frame, best: &Best) -> Html {
     }
 }
 
-fn curve(frame: &Frame, line: &Line, i: usize) -> Html {
+fn curve(frame: &Frame, line: &Line, i: usize, selected_m: f64) -> Html {
     let inside = |p: &&[f64; 2]| frame.x.holds(p[0]);
     let path = polyline(
         line.points.iter().filter(inside).map(|p| [frame.x.px(p[0]), frame.y.px(frame.y.held(p[1]))]),
     );
     // The first curve has its name below it, the second above.
-    let at = line.points[line.points.len() * (2 + 2 * i) / 9];
+    // It keeps away from the figure of the ring selected.
+    let places = [2, 5].map(|ninths| line.points[line.points.len() * ninths / 9]);
+    let away = |p: &[f64; 2]| (p[0] - selected_m).abs();
+    let at = if away(&places[0]) > away(&places[1]) { places[0] } else { places[1] };
     let off = if i == 0 { 24.0 } else { -10.0 };
     html! {
         <g aria-hidden="true">

@@ -3,15 +3,17 @@
 use serde::{Deserialize, Serialize};
 
 use crate::state::{State, Theme};
-use crate::units::Units;
+use crate::units::{LengthUnit, Units};
 
 /// Every page opened from disk shares one storage, so the key says whose it is and of which version.
 const KEY: &str = "spokeshave.1.view";
 
 /// Units and colours as picked.
 #[derive(Clone, Copy, Debug, Default, PartialEq, Serialize, Deserialize)]
+#[serde(default)]
 pub struct Remembered {
     units: Option<Units>,
+    length: Option<LengthUnit>,
     theme: Theme,
 }
 
@@ -19,7 +21,8 @@ impl Remembered {
     /// What is worth remembering of a state.
     #[must_use]
     pub fn of(state: &State) -> Self {
-        Self { units: state.units_picked.then_some(state.units), theme: state.theme }
+        let units = state.units_picked.then_some(state.units);
+        Self { units, length: Some(state.units.length), theme: state.theme }
     }
 
     /// The state with what was remembered.
@@ -28,6 +31,7 @@ impl Remembered {
         if let Some(units) = self.units {
             (state.units, state.units_picked) = (units, true);
         }
+        state.units.length = self.length.unwrap_or(state.units.length);
         state.theme = self.theme;
         state
     }

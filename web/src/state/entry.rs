@@ -31,7 +31,8 @@ pub fn shown_text(job: &Job, drawn: &[DrawnStation], units: Units, field: Field)
     let Some(value) = field.value(job, drawn) else { return String::new() };
     let given = field.is_given(job);
     let fewest = if given { units.box_decimals(quantity) } else { units.decimals(quantity) };
-    let most = fewest + usize::from(quantity != Quantity::Count && given);
+    let finer = quantity != Quantity::Count && fewest < 3;
+    let most = fewest + usize::from(finer && given);
     let mut text = number::plain(units.shown(quantity, value), most);
     if most > fewest && text.ends_with('0') {
         text.pop();

@@ -190,11 +190,17 @@ impl State {
             Action::Open(name, text) => self.open(&name, &text),
             Action::Demo(i) => self.start_from(DEMOS.get(i).map_or(BLANK, |d| d.json), "open an example"),
             Action::Blank => self.start_from(BLANK, "start a new job"),
-            Action::Units(units) => (self.units, self.units_picked) = (units, true),
+            Action::Units(units) => self.pick_units(units),
             Action::Theme(theme) => self.theme = theme,
             Action::Say(notice) => self.notice = Some(notice),
             Action::Dismiss => self.notice = None,
         }
+    }
+
+    /// Picking millimetres or inches leaves the other units free to suit the next job.
+    fn pick_units(&mut self, units: Units) {
+        self.units_picked |= Units { length: self.units.length, ..units } != self.units;
+        self.units = units;
     }
 
     fn enter(&mut self, action: Action) {
@@ -323,7 +329,7 @@ impl State {
     /// Another job; the one before can be had back by undoing.
     fn show_new(&mut self, job: Job, step: String) {
         if !self.units_picked {
-            self.units = Units::suiting(job.propeller.diameter_m);
+            self.units = Units { length: self.units.length, ..Units::suiting(job.propeller.diameter_m) };
         }
         (self.point, self.station) = places(&job);
         self.history.step(step, job);

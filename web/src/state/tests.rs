@@ -95,6 +95,15 @@ fn what_is_allowed_is_said_in_the_unit_shown() {
 }
 
 #[test]
+fn inches_stay_when_another_job_brings_other_units() {
+    let inches = Units { length: LengthUnit::Inch, ..start().units };
+    let small = start().after(Action::Units(inches)).after(Action::Demo(2));
+    assert_eq!((small.units.length, small.units.power), (LengthUnit::Inch, crate::units::PowerUnit::Watt));
+    let picked = Units { power: crate::units::PowerUnit::Horsepower, ..inches };
+    assert_eq!(start().after(Action::Units(picked)).after(Action::Demo(2)).units, picked);
+}
+
+#[test]
 fn chord_and_thickness_are_measures_of_the_wood_and_do_not_move_each_other() {
     let before = drawn(start().job())[8];
     let state = typed(&start(), CHORD_9, "70,0");

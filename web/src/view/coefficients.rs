@@ -40,7 +40,8 @@ pub fn Coefficients(props: &CoefficientsProps) -> Html {
 /// The coefficients at the flight point, in a line.
 #[must_use]
 pub fn in_a_line(point: Option<&PointResult>) -> String {
-    let Some(f) = point.map(|p| &p.figures) else { return String::new() };
+    let answered = point.filter(|p| p.rpm.is_some());
+    let Some(f) = answered.map(|p| &p.figures) else { return "no answer at this flight point".into() };
     let text = |v, d| fixed_or_none(v, d);
     format!(
         "J {}, CT {}, CP {}, CQ {}, CT/CQ {}",

@@ -2,6 +2,7 @@
 
 use std::rc::Rc;
 
+use spokeshave::drawn::DrawnStation;
 use spokeshave::job::Rotation;
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rotor::DepartureMap;
@@ -11,6 +12,7 @@ use yew::prelude::*;
 use super::chips::{Chips, air_words, sentence};
 use super::page::PageProps;
 use super::room::{Room, use_room};
+use super::verdict::Brief;
 use super::{Seen, use_act};
 use crate::app::Later;
 use crate::blade_view::{
@@ -29,9 +31,18 @@ fn axis(state: &State) -> RadiusAxis {
     RadiusAxis::new(p.hub_diameter_m / 2.0, p.diameter_m / 2.0, AXIS_PX)
 }
 
-/// The stations at the flight point selected; none where it has no answer.
+/// The stations at the flight point selected; as drawn, without a departure, where it has no answer.
 fn stations(props: &PageProps) -> Vec<StationResult> {
-    props.now.point.as_ref().as_ref().map_or_else(Vec::new, |r| r.stations.clone())
+    let answered = props.now.point.as_ref().as_ref().filter(|r| !r.stations.is_empty());
+    let tip_m = props.state.job().propeller.diameter_m / 2.0;
+    let as_drawn = |d: &DrawnStation| StationResult {
+        radius_m: d.radius_m,
+        radius_fraction: d.radius_m / tip_m,
+        chord_m: d.chord_m,
+        blade_angle_deg: d.angle_deg,
+        ..StationResult::default()
+    };
+    answered.map_or_else(|| props.now.drawn.iter().map(as_drawn).collect(), |r| r.stations.clone())
 }
 
 /// The blade standing: flight points, their sentence, the blade with its departure.
@@ -42,6 +53,7 @@ pub fn Standing(props: &PageProps) -> Html {
         <div class="side">
             <Chosen ..props.clone() />
             { blade(props, false, &act.on(Action::SelectStation)) }
+            if let Some(result) = &*props.now.point { <Brief result={result.clone()} units={props.state.units} /> }
         </div>
     }
 }
@@ -79,9 +91,6 @@ fn blade(props: &PageProps, lying: bool, on_select: &Callback<usize>) -> Html {
     let Some(rig) = &props.now.rig else { return html! {} };
     let shape = Rc::new(Planform::of(&rig.0.rotor.blade));
     let stations = Rc::new(stations(props));
-    if stations.is_empty() {
-        return no_answer(props);
-    }
     let (length, selected) = (state.units.unit(Quantity::Length), state.station);
     if lying {
         return html! { <BladeStrip {shape} {stations} {length} {selected} on_select={on_select.clone()} /> };
@@ -92,9 +101,8 @@ fn blade(props: &PageProps, lying: bool, on_select: &Callback<usize>) -> Html {
     }
 }
 
-fn no_answer(props: &PageProps) -> Html {
-    let words = props.now.point.as_ref().as_ref().map_or("There is no flight point.", |r| r.state.sentence());
-    html! { <p class="no-answer">{ words }{ " The blade has no departure to show." }</p> }
+fn no_answer(what: &str) -> Html {
+    html! { <p class="no-answer">{ format!("Without an answer at this flight point there is no {what}.") }</p> }
 }
 
 /// The departure map, or why there is none.
@@ -110,7 +118,7 @@ pub fn MapReading(props: &PageProps) -> Html {
             let words = if answered {
                 html! {}
             } else {
-                no_answer(props)
+                no_answer("map")
             };
             html! { <div class="map-place map-waiting" aria-busy={answered.then_some("true")}>{ words }</div> }
         }
@@ -186,7 +194,7 @@ pub fn StationReading(props: &PageProps) -> Html {
     let thickness = result.and_then(|r| r.stations.get(i)).map_or(0.0, |s| s.thickness_ratio);
     let outline = use_outline(shipped_section(props), thickness);
     let Some((point, station)) = result.and_then(|r| Some((r, r.stations.get(i)?))) else {
-        return html! { <div class="detail">{ no_answer(props) }</div> };
+        return html! { <div class="detail">{ no_answer("angle of attack at its stations") }</div> };
     };
     html! {
         <div class="detail">

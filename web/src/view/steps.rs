@@ -13,7 +13,7 @@ pub const PARTS: [(&str, &str); 5] = [
 ];
 
 /// Height over which a part counts as reached, pixels.
-const REACHED_PX: f64 = 160.0;
+const REACHED_PX: f64 = 240.0;
 
 /// The links.
 #[component]

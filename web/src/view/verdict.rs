@@ -33,6 +33,7 @@ pub fn Verdict(props: &VerdictProps) -> Html {
         return html! {
             <section class="verdict-none" aria-label="Verdict">
                 <b>{ format!("{}: no answer. ", result.name) }</b>{ result.state.sentence() }
+                { " " }<a href="#points">{ "Set it another way" }</a>
             </section>
         };
     }
@@ -50,6 +51,18 @@ pub fn Verdict(props: &VerdictProps) -> Html {
     html! {
         <section aria-label={format!("Verdict at {}", result.name)}><ul class="verdict">{ for cells }</ul></section>
     }
+}
+
+/// The same figures in brief, for under the blade where they stay in sight.
+#[component]
+pub fn Brief(props: &VerdictProps) -> Html {
+    if props.result.state != Answer::Ok {
+        return html! {};
+    }
+    let rows = cells(props.units, &props.result).into_iter().map(|cell| {
+        html! { <li><span>{ cell.name }</span><b>{ format!("{} {}", cell.figure, cell.unit) }</b></li> }
+    });
+    html! { <ul class="brief" aria-hidden="true">{ for rows }</ul> }
 }
 
 fn cells(units: Units, r: &PointResult) -> Vec<Cell> {
