@@ -3,6 +3,7 @@
 use super::{fixed_throttle, rpm_of, throttle_condition};
 use crate::curve::Curve;
 use crate::job::PitchControl;
+use crate::result::State;
 use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, thrustless_speed_m_s};
 
@@ -10,7 +11,8 @@ use crate::rotor::{Condition, thrustless_speed_m_s};
 const NODES: u32 = 8;
 
 /// Conditions at equal steps of speed from rest, at the air of `at`: at full throttle as far as the engine can be
-/// matched, or, without an engine, at the rpm of `at` up to where the thrust is gone.
+/// matched and, where its limit rpm is what ends that, on at that rpm (throttled back); without an engine at the rpm of
+/// `at`. Up to where the thrust is gone at the rpm of `at`.
 #[must_use]
 pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     let count = speeds.max(2);
@@ -34,21 +36,49 @@ pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     }
 }
 
-/// Full-throttle conditions at rising speeds, up to the first that has none.
+/// Full-throttle conditions at rising speeds, held to the limit rpm, up to the first that has none.
 fn full_throttle(rig: &Rig, at: &Condition, speeds: impl Iterator<Item = f64>) -> Vec<Condition> {
     let Some(shaft) = &rig.shaft else { return Vec::new() };
     let governed = matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. });
+    let highest = shaft.limit_rpm().unwrap_or(f64::INFINITY).min(shaft.rpm_range().1);
     let mut near = None;
+    let mut held = false;
     speeds
         .map_while(|v| {
             let here = Condition { airspeed_m_s: v, ..*at };
+            let at_limit = Condition { rotation_rad_s: rotation_rad_s(highest), ..here };
+            if held {
+                return Some(at_limit);
+            }
             let full = if governed {
                 throttle_condition(rig, &here, 1.0)
             } else {
                 fixed_throttle(rig, shaft, &here, 1.0, near)
             };
+            // Only past a speed that was matched: a propeller too fine to be run up at rest has no such line.
+            held = full == Err(State::OverLimitRpm) && near.is_some();
             near = full.as_ref().ok().map(rpm_of);
-            full.ok()
+            if held { Some(at_limit) } else { full.ok() }
         })
         .collect()
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::job::{DEMOS, Job};
+
+    #[test]
+    fn every_full_throttle_point_lies_on_its_own_line() {
+        let job = Job::from_json(DEMOS[0].json).unwrap();
+        let rig = Rig::new(&job).unwrap();
+        for (i, point) in job.flight_points.iter().enumerate() {
+            let at = rig.condition(i).unwrap();
+            let line = line(&rig, &at, 60);
+            let fastest = line.last().unwrap().airspeed_m_s;
+            assert!(at.airspeed_m_s < fastest, "{}: {} of {fastest} m/s", point.name, at.airspeed_m_s);
+            let highest = rig.shaft.as_ref().and_then(|s| s.limit_rpm()).unwrap_or(f64::INFINITY);
+            assert!(line.iter().all(|c| rpm_of(c) <= highest * (1.0 + 1e-9)), "{}", point.name);
+        }
+    }
 }

@@ -174,7 +174,10 @@ fn marks(props: &MapFigureProps) -> Vec<FlightMark> {
 fn map_note(props: &MapFigureProps) -> String {
     let (state, map) = (&props.state, &props.map);
     let (low, high) = map.rpm.iter().fold((f64::INFINITY, 0.0_f64), |(a, b), r| (a.min(*r), b.max(*r)));
-    let along = if high - low > 0.5 {
+    let held = map.rpm.iter().filter(|r| (**r - high).abs() < 1e-6).count() > 1;
+    let along = if high - low > 0.5 && held {
+        format!("full throttle held to {}", with_unit(state.units, Quantity::Rpm, Some(high)))
+    } else if high - low > 0.5 {
         "full throttle".to_string()
     } else {
         format!("at {}", with_unit(state.units, Quantity::Rpm, Some(high)))

@@ -135,7 +135,7 @@ fn axes(frame: &Frame, props: &DepartureChartProps) -> Html {
     let clear = |ticks: Vec<_>, words: f64| -> Vec<_> {
         ticks.into_iter().filter(|(x, _): &(f64, _)| *x < frame.right - words).collect()
     };
-    let speeds = clear(placed(&frame.speed(), &props.speed, most), 30.0);
+    let speeds = clear(placed(&frame.speed(), &props.speed, most), 46.0);
     html! {
         <g aria-hidden="true">
             <rect class="frame" x={px(frame.left)} y={px(frame.axis.top_px)} width={px(frame.width())} height={px(frame.height())} />

@@ -54,18 +54,27 @@ pub(super) fn Reading(props: &ReadingProps) -> Html {
 fn shown(props: &ReadingProps, [x, y]: [f64; 2]) -> Html {
     let frame = &props.frame;
     let [first, second] = words(props, [x, y]);
-    let right = x > 0.5 * (frame.left + frame.right);
-    let (tx, anchor) = if right { (x - 10.0, "end") } else { (x + 10.0, "start") };
-    let ty = if y < frame.axis.top_px + 44.0 { y + 20.0 } else { y - 26.0 };
+    let longest = first.chars().count().max(second.chars().count()) as f64;
+    let plate = [6.3 * longest + 14.0, 40.0];
+    let [px0, py0] = plate_at(frame, [x, y], plate);
     let (top, low) = (px(frame.axis.top_px), px(frame.axis.hub_px));
     html! {
         <>
             <line class="cross" x1={px(x)} x2={px(x)} y1={top} y2={low} />
             <line class="cross" x1={px(frame.left)} x2={px(frame.right)} y1={px(y)} y2={px(y)} />
-            <text class="haloed" x={px(tx)} y={px(ty)} text-anchor={anchor}>{ first }</text>
-            <text class="haloed strong" x={px(tx)} y={px(ty + 16.0)} text-anchor={anchor}>{ second }</text>
+            <rect class="plate" x={px(px0)} y={px(py0)} width={px(plate[0])} height={px(plate[1])} rx="3" />
+            <text x={px(px0 + 7.0)} y={px(py0 + 16.0)}>{ first }</text>
+            <text class="strong" x={px(px0 + 7.0)} y={px(py0 + 32.0)}>{ second }</text>
         </>
     }
+}
+
+/// Upper left corner of the plate: to the side and above the pointer that have room for it.
+fn plate_at(frame: &Frame, [x, y]: [f64; 2], [width, height]: [f64; 2]) -> [f64; 2] {
+    const OFF: f64 = 10.0;
+    let left = if x + OFF + width > frame.right { x - OFF - width } else { x + OFF };
+    let top = if y - OFF - height < frame.axis.top_px { y + OFF } else { y - OFF - height };
+    [left.max(frame.left), top]
 }
 
 fn words(props: &ReadingProps, [x, y]: [f64; 2]) -> [String; 2] {
@@ -98,6 +107,16 @@ fn figures(cell: &MapCell) -> String {
 mod tests {
     use super::super::frame::tests::sample;
     use super::*;
+
+    #[test]
+    fn the_plate_stays_on_the_map() {
+        let frame = super::super::frame::tests::frame();
+        for (x, y) in [(10.0, 62.0), (410.0, 62.0), (410.0, 462.0), (200.0, 300.0)] {
+            let [left, top] = plate_at(&frame, [x, y], [180.0, 40.0]);
+            assert!(left >= 10.0 && left + 180.0 <= 410.0, "{x} {y}: {left}");
+            assert!(top >= 62.0 && top + 40.0 <= 462.0, "{x} {y}: {top}");
+        }
+    }
 
     #[test]
     fn the_nearest_cell_speaks() {

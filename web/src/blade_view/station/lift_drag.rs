@@ -48,11 +48,15 @@ fn shown(s: &StationResult, curve: &[[f64; 2]]) -> (f64, f64) {
 }
 
 fn marks(s: &StationResult) -> Vec<Point> {
+    /// Nearer than this, degrees, now and best are one point on the drawing.
+    const ONE_DEG: f64 = 0.25;
+    let together = s.departure_deg.is_some_and(|d| d.abs() < ONE_DEG);
     let now =
         s.angle_of_attack_deg.zip(s.cl.zip(s.cd)).filter(|(_, (_, cd))| *cd > 0.0).map(|(at, (cl, cd))| {
             Point {
                 at: [at, cl / cd],
-                words: format!("now {}", fixed(cl / cd, 1)).into(),
+                words: format!("{} {}", if together { "now, near best" } else { "now" }, fixed(cl / cd, 1))
+                    .into(),
                 class: Some(departure::style(s.departure_deg)),
                 strong: true,
             }
@@ -63,7 +67,7 @@ fn marks(s: &StationResult) -> Vec<Point> {
         class: None,
         strong: false,
     });
-    now.into_iter().chain(best).collect()
+    now.into_iter().chain(best.filter(|_| !together)).collect()
 }
 
 fn spans(s: &StationResult, end: f64) -> Vec<Span> {
