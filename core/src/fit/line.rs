@@ -77,7 +77,8 @@ mod tests {
             let line = line(&rig, &at, 60);
             let fastest = line.last().unwrap().airspeed_m_s;
             assert!(at.airspeed_m_s < fastest, "{}: {} of {fastest} m/s", point.name, at.airspeed_m_s);
-            let highest = rig.shaft.as_ref().and_then(|s| s.limit_rpm()).unwrap_or(f64::INFINITY);
+            let highest =
+                rig.shaft.as_ref().and_then(crate::engine::Shaft::limit_rpm).unwrap_or(f64::INFINITY);
             assert!(line.iter().all(|c| rpm_of(c) <= highest * (1.0 + 1e-9)), "{}", point.name);
         }
     }
