@@ -3,6 +3,7 @@
 #![forbid(unsafe_code)]
 
 pub mod browser;
+pub mod page;
 pub mod reference;
 pub mod tools;
 pub mod tunnel;

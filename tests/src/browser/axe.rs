@@ -29,7 +29,7 @@ impl Browser {
         self.run(&rules).await?;
         let ask = "const done = arguments[0];
             axe.run(document).then(found => done(found.violations), fault => done(String(fault)))";
-        let found = self.client.execute_async(ask, vec![]).await?;
+        let found = self.run_async(ask).await?;
         let found = found.as_array().with_context(|| format!("the rules did not run: {found}"))?;
         Ok(found.iter().map(violation).collect())
     }

@@ -23,21 +23,34 @@ impl Browser {
     /// # Errors
     /// If it does not appear, or there are several.
     pub async fn control(&self, role: &str, name: &str) -> Result<Control> {
-        let what = format!("{role} {name:?}");
+        self.one_control(role, &format!("{name:?}"), |found| found == name).await
+    }
+
+    /// Waits for the one control with this role and a name that starts so.
+    ///
+    /// # Errors
+    /// If it does not appear, or there are several.
+    pub async fn control_starting(&self, role: &str, start: &str) -> Result<Control> {
+        self.one_control(role, &format!("{start:?}…"), |found| found.starts_with(start)).await
+    }
+
+    async fn one_control(&self, role: &str, name: &str, fits: impl Fn(&str) -> bool) -> Result<Control> {
+        let what = format!("{role} {name}");
         let one = async || {
-            let nodes = self.nodes(role, |found| found == name).await?;
+            let nodes = self.nodes(role, &fits).await?;
             anyhow::ensure!(nodes.len() < 2, "{} controls are {what}", nodes.len());
             Ok(nodes.into_iter().next())
         };
-        let node = self.wait(&what, one).await;
-        let node = match node {
-            Ok(node) => node,
+        match self.wait(&what, one).await {
+            Ok(node) => {
+                let element = self.element(node).await.with_context(|| what.clone())?;
+                Ok(Control { element, what })
+            }
             Err(error) => {
                 let others = self.names(role).await?;
-                return Err(error.context(format!("each {role} there: {others:?}")));
+                Err(error.context(format!("each {role} there: {others:?}")))
             }
-        };
-        Ok(Control { element: self.element(node).await.with_context(|| what.clone())?, what })
+        }
     }
 
     /// The names of all controls with this role, in page order.
@@ -115,9 +128,10 @@ impl Control {
     /// # Errors
     /// If nothing can be typed there.
     pub async fn replace(&self, text: &str) -> Result<()> {
+        let backspace = String::from(char::from(Key::Backspace));
         let select_all = format!("{}a{}", char::from(Key::Control), char::from(Key::Null));
         self.keys(&select_all).await?;
-        self.keys(text).await
+        self.keys(if text.is_empty() { &backspace } else { text }).await
     }
 
     /// Sends keys to it.

@@ -36,7 +36,7 @@ impl Desktop {
         let program =
             tools::xvfb().context("Xvfb is missing: run `cargo prove`, or install the package xvfb")?;
         let mut server = Command::new(program)
-            .args(["-displayfd", "1", "-screen", "0", "1200x900x24", "-nolisten", "tcp"])
+            .args(["-displayfd", "1", "-screen", "0", "1440x900x24", "-nolisten", "tcp"])
             .stdin(Stdio::null())
             .stdout(Stdio::piped())
             .stderr(Stdio::null())
@@ -53,7 +53,7 @@ impl Desktop {
 
     /// Preferences of a browser that saves into a folder of ours in the way asked for.
     pub(super) fn preferences(&self) -> Value {
-        let kind = if self.save_as == SaveAs::FileOnly { 0 } else { 1 };
+        let kind = u8::from(self.save_as == SaveAs::CompletePage);
         json!({"savefile": {"type": kind, "default_directory": self.saved.path()}})
     }
 
@@ -94,8 +94,11 @@ impl Desktop {
     /// Waits for a window whose title holds a text.
     async fn window(&self, title: &str) -> Result<String> {
         let begun = Instant::now();
+        // The title is searched for as a pattern, in which `.*` stands for anything.
+        let words = title.split(|c: char| !c.is_ascii_alphanumeric()).filter(|word| !word.is_empty());
+        let pattern = words.collect::<Vec<_>>().join(".*");
         loop {
-            let found = self.xdotool(&["search", "--onlyvisible", "--name", title]);
+            let found = self.xdotool(&["search", "--onlyvisible", "--name", &pattern]);
             if let Some(window) = found.ok().and_then(|found| found.lines().last().map(str::to_owned)) {
                 return Ok(window);
             }

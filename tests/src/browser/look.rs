@@ -60,7 +60,7 @@ impl Browser {
         // Two frames on, everything asked for so far has been drawn.
         let drawn =
             "const done = arguments[0]; requestAnimationFrame(() => requestAnimationFrame(() => done()))";
-        self.client.execute_async(drawn, vec![]).await?;
+        self.run_async(drawn).await?;
         let mut ask = json!({"format": "png"});
         if whole_page {
             let layout = self.command("Page.getLayoutMetrics", json!({})).await?;

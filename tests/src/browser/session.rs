@@ -146,6 +146,15 @@ impl Browser {
         self.client.execute(script, vec![]).await.with_context(|| format!("in the page: {script}"))
     }
 
+    /// Runs JavaScript in the page that calls its last argument with the value to give back.
+    ///
+    /// # Errors
+    /// If the script throws or never calls back.
+    pub async fn run_async(&self, script: &str) -> Result<Value> {
+        let value = self.client.execute_async(script, vec![]).await;
+        value.with_context(|| format!("in the page: {script}"))
+    }
+
     /// Runs JavaScript in every page opened from now on, before any script of the page.
     ///
     /// # Errors

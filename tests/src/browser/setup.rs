@@ -8,7 +8,7 @@ use std::path::Path;
 
 /// Flags for a browser that asks nothing and calls nobody. The sandbox needs rights that test machines
 /// often lack, and the only page opened is our own.
-const FLAGS: [&str; 11] = [
+const FLAGS: [&str; 12] = [
     "--no-sandbox",
     "--disable-gpu",
     "--disable-quic",
@@ -20,6 +20,8 @@ const FLAGS: [&str; 11] = [
     "--disable-sync",
     "--enable-unsafe-swiftshader",
     "--hide-scrollbars",
+    // The size of `WIDE`.
+    "--window-size=1440,900",
 ];
 
 /// What the driver is asked for: a profile of its own, no window unless there is a desktop, all logs.

@@ -1,13 +1,18 @@
 //! A fault in the program never loses the job, and a job that stops the page does not stop it for ever.
 
 use anyhow::Result;
+use spokeshave::job::Job;
 use spokeshave_tests::browser::{Browser, drive};
+use spokeshave_tests::page::example;
 
-const JOB: &str = r#"{"title":"kept </script> & safe"}"#;
+/// A job with a title that would end a script, if it could.
+fn job() -> Result<String> {
+    Ok(Job { title: "kept </script> & safe".into(), ..example()? }.to_json())
+}
 
 /// What the application does before it works a job out.
 async fn begin_work(browser: &Browser) -> Result<()> {
-    browser.run(&format!("spokeshave.keep.before({})", serde_json::to_string(JOB)?)).await.map(drop)
+    browser.run(&format!("spokeshave.keep.before({})", serde_json::to_string(&job()?)?)).await.map(drop)
 }
 
 #[tokio::test(flavor = "multi_thread")]
@@ -19,7 +24,7 @@ async fn a_fault_shows_a_message_that_offers_the_job() -> Result<()> {
         browser.wait_for_text("The page has stopped").await?;
         assert!(browser.violations().await?.is_empty(), "{:?}", browser.violations().await?);
         let file = browser.download(async || browser.press("Save the job as a file").await).await?;
-        assert_eq!(std::fs::read_to_string(file)?, JOB);
+        assert_eq!(std::fs::read_to_string(file)?, job()?);
         Ok(())
     })
     .await
@@ -51,7 +56,7 @@ async fn a_job_that_never_finished_is_not_tried_again_unasked() -> Result<()> {
         browser.reload_unstarted().await?;
         browser.wait_for_text("This job stopped the page last time").await?;
         let file = browser.download(async || browser.press("Save the job as a file").await).await?;
-        assert_eq!(std::fs::read_to_string(file)?, JOB);
+        assert_eq!(std::fs::read_to_string(file)?, job()?);
 
         browser.press("Start with an example").await?;
         browser.wait_until_started().await?;
@@ -67,7 +72,7 @@ async fn leaving_in_the_middle_of_the_work_is_no_fault() -> Result<()> {
         browser.open_page().await?;
         begin_work(browser).await?;
         browser.reload().await?;
-        assert_eq!(browser.run("return spokeshave.keep.atStart()").await?, JOB);
+        assert_eq!(browser.run("return spokeshave.keep.atStart()").await?, job()?);
         Ok(())
     })
     .await

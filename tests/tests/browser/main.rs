@@ -1,0 +1,8 @@
+//! The page in a real browser, opened from disk.
+
+mod access;
+mod input;
+mod job;
+mod native_save;
+mod opening;
+mod rescue;
