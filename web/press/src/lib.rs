@@ -18,7 +18,7 @@ pub use toolchain::{Source, Toolchain};
 pub use workspace::Workspace;
 
 use anyhow::{Context, Result};
-use std::path::PathBuf;
+use std::path::{Path, PathBuf};
 
 /// The page as it lies on disk.
 #[derive(Debug, Clone)]
@@ -41,7 +41,16 @@ pub fn build_page(workspace: &Workspace, source: Source) -> Result<Page> {
     let module = compile::compile(workspace, &toolchain)?;
     let style = stylesheet::joined(workspace)?;
     let packed = pack::pack(&module, &style)?;
-    let path = workspace.target.join("spokeshave.html");
-    std::fs::write(&path, &packed.html).with_context(|| format!("cannot write {}", path.display()))?;
+    let folder = workspace.target.join("page");
+    let path = folder.join("spokeshave.html");
+    write(&folder, &path, &packed.html).with_context(|| format!("cannot write {}", path.display()))?;
     Ok(Page { path, bytes: packed.html.len(), module_bytes: packed.module_bytes })
+}
+
+/// Writes beside the file and then renames, so that nobody ever opens half a page.
+fn write(folder: &Path, path: &Path, text: &str) -> std::io::Result<()> {
+    let unfinished = folder.join(format!("spokeshave.{}.part", std::process::id()));
+    std::fs::create_dir_all(folder)?;
+    std::fs::write(&unfinished, text)?;
+    std::fs::rename(unfinished, path)
 }
