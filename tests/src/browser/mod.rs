@@ -11,6 +11,7 @@ mod control;
 mod desktop;
 mod download;
 mod driver;
+mod effort;
 mod log;
 mod look;
 mod page;
