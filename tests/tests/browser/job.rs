@@ -1,8 +1,9 @@
 //! A person changes a job on the page, takes it back, and finds it again.
 
 use anyhow::{Context, Result};
+use fantoccini::key::Key;
 use spokeshave::job::Job;
-use spokeshave_tests::browser::{Browser, built_page, drive};
+use spokeshave_tests::browser::{Browser, NARROW, built_page, drive};
 use spokeshave_tests::page::{computed_departures_deg, example, with_angle};
 use std::path::Path;
 
@@ -50,6 +51,8 @@ async fn turning_a_station_changes_its_departure_as_the_core_says_and_undo_bring
         browser.wait_for_departures_of(&example()?, STATION).await?;
         browser.control_starting("button", "Redo: ").await?.click().await?;
         browser.wait_for_departures_of(&turned()?.0, STATION).await?;
+        browser.keys(&format!("{}z{}", char::from(Key::Control), char::from(Key::Null))).await?;
+        browser.wait_for_departures_of(&example()?, STATION).await?;
         assert_quiet(browser).await
     })
     .await
@@ -87,6 +90,19 @@ async fn a_saved_job_opens_in_another_browser() -> Result<()> {
         browser.wait_for_departures_of(&example()?, STATION).await?;
         browser.choose_file(&copy).await?;
         browser.wait_for_departures_of(&turned()?.0, STATION).await?;
+        assert_quiet(browser).await
+    })
+    .await
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn on_a_narrow_screen_the_same_is_behind_the_menu() -> Result<()> {
+    drive("narrow-save", async |browser| {
+        browser.set_size(NARROW).await?;
+        browser.open_page().await?;
+        browser.control_starting("button", "Menu").await?.click().await?;
+        let file = browser.download(async || browser.press("Save").await).await?;
+        assert!(Job::from_json(&std::fs::read_to_string(file)?)? == example()?);
         assert_quiet(browser).await
     })
     .await
