@@ -8,6 +8,9 @@ use spokeshave_tests::page::example;
 const FRAME_MS: f64 = 16.0;
 /// What a person takes for "at once".
 const AT_ONCE_MS: f64 = 100.0;
+/// A machine that gives the page less than this share of the processor is busy with something else:
+/// what a clock on the wall says there is not about the page.
+const OWN_SHARE: f64 = 0.9;
 /// Edits timed. Of each time the least counts: it is what the page takes when nothing holds it up.
 const EDITS: usize = 15;
 

@@ -17,4 +17,17 @@ impl Browser {
         let task = metrics.find(|metric| metric["name"] == "TaskDuration").context("no task time")?;
         Ok(1000.0 * task["value"].as_f64().context("no task time")?)
     }
+
+    /// Which share of the time the page's thread gets while it wants the processor: 1 on a machine that
+    /// does nothing else.
+    ///
+    /// # Errors
+    /// If the browser does not keep count.
+    pub async fn share_of_processor(&self) -> Result<f64> {
+        const SPIN_MS: f64 = 300.0;
+        let spin = format!("const end = performance.now() + {SPIN_MS}; while (performance.now() < end) {{}}");
+        let before_ms = self.computing_ms().await?;
+        self.run(&spin).await?;
+        Ok((self.computing_ms().await? - before_ms) / SPIN_MS)
+    }
 }
