@@ -9,7 +9,7 @@ const FRAME_MS: f64 = 16.0;
 /// What a person takes for "at once".
 const AT_ONCE_MS: f64 = 100.0;
 /// A machine that gives the page less than this share of the processor is busy with something else:
-/// what a clock on the wall says there is not about the page.
+/// how long all that follows takes there says nothing about the page.
 const OWN_SHARE: f64 = 0.9;
 /// Edits timed. Of each time the least counts: it is what the page takes when nothing holds it up.
 const EDITS: usize = 15;
@@ -49,10 +49,14 @@ async fn an_edit_is_seen_within_a_frame_and_all_that_follows_at_once() -> Result
             last.push(times[1].as_f64().context("nothing changed")?);
         }
         let (first, last, computing) = (least(&first), least(&last), least(&computing));
-        println!(
-            "departure after {first:.1} ms, everything after {last:.1} ms, {computing:.1} ms of computing"
-        );
+        let share = browser.share_of_processor().await?;
+        println!("departure after {first:.1} ms, everything after {last:.1} ms");
+        println!("{computing:.1} ms of computing, with {:.0} % of a processor", 100.0 * share);
         assert!(first <= FRAME_MS, "{first} ms");
+        if share < OWN_SHARE {
+            println!("not judged: this machine is busy with something else");
+            return Ok(());
+        }
         assert!(last <= AT_ONCE_MS, "{last} ms");
         Ok(())
     })
