@@ -114,6 +114,9 @@ pub(crate) fn signed_area(points: &[[f64; 2]]) -> f64 {
 
 /// Looks for two pieces that cross, sorted along the chord so that a long list takes no long time.
 fn crossings(points: &[[f64; 2]], places: &[Place]) -> Result<(), OutlineError> {
+    let (head, tail) = (points[0], points[points.len() - 1]);
+    // Ends that meet to rounding are one point.
+    let shut = (head[0] - tail[0]).hypot(head[1] - tail[1]) < 1e-9;
     let reach = |k: usize| [points[k][0].min(points[k + 1][0]), points[k][0].max(points[k + 1][0])];
     let mut order: Vec<usize> = (0..points.len() - 1).collect();
     order.sort_by(|&i, &j| reach(i)[0].total_cmp(&reach(j)[0]).then(i.cmp(&j)));
@@ -121,7 +124,7 @@ fn crossings(points: &[[f64; 2]], places: &[Place]) -> Result<(), OutlineError> 
         for &j in order[at + 1..].iter().take_while(|&&j| reach(j)[0] <= reach(i)[1]) {
             let (i, j) = (i.min(j), i.max(j));
             let neighbours = j - i == 1;
-            let ends = i == 0 && j == points.len() - 2 && points[0] == points[points.len() - 1];
+            let ends = shut && i == 0 && j == points.len() - 2;
             if !neighbours && !ends && cross(points[i], points[i + 1], points[j], points[j + 1]) {
                 return Err(OutlineError::Crossing { first: places[i], second: places[j] });
             }

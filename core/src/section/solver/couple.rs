@@ -17,6 +17,10 @@ pub(super) const TOLERANCE: f64 = 1e-5;
 /// Change in the step before, below which a small residual is believed.
 const SETTLED: f64 = 2e-3;
 
+/// Length over which the curvature of the wake is averaged to each side, over the thickness `theta + dstar` of the wake at the
+/// trailing edge: potential flow turns without bound there, a real wake not within its own thickness.
+const CURVE_REACH: f64 = 1.5;
+
 /// What one iteration found and did.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub(super) struct Progress {
@@ -45,10 +49,10 @@ pub(super) fn law(layer: &Layer, flow: &Flow) -> Vec<f64> {
 }
 
 /// Speeds from potential flow with the present mass defects, less the present speeds, in the direction of the flow.
-pub(super) fn speed_defect(layer: &Layer, flow: &Flow) -> Vec<f64> {
+pub(super) fn speed_defect(layer: &Layer, flow: &Flow, influence: &Matrix) -> Vec<f64> {
     let mass: Vec<f64> = (0..layer.total()).map(|i| layer.sign(i) * layer.mass(i)).collect();
     (0..layer.total())
-        .map(|i| layer.sign(i) * (flow.still[i] + dot(flow.by_mass.row(i), &mass)) - layer.state[i][3])
+        .map(|i| layer.sign(i) * (flow.still[i] + dot(influence.row(i), &mass)) - layer.state[i][3])
         .collect()
 }
 
@@ -68,7 +72,10 @@ pub(super) fn re_march(layer: &mut Layer, flow: &Flow) -> Vec<f64> {
 /// the numbers are not finite.
 pub(super) fn iterate(layer: &mut Layer, flow: &Flow, settled: f64, limit: f64) -> Option<Progress> {
     let c = re_march(layer, flow);
-    let r = speed_defect(layer, flow);
+    let shape: Vec<f64> = (layer.course.body..layer.total()).map(|i| layer.shape(i)).collect();
+    let edge = &layer.state[layer.course.body];
+    let influence = flow.influence(&shape, CURVE_REACH * (edge[0] + edge[1]));
+    let r = speed_defect(layer, flow, &influence);
     let speed = rms(&r);
     let system = Chains::new(layer, &c)?;
     if speed < TOLERANCE && system.worst < TOLERANCE && settled < SETTLED {
@@ -77,7 +84,7 @@ pub(super) fn iterate(layer: &mut Layer, flow: &Flow, settled: f64, limit: f64) 
     if !speed.is_finite() {
         return None;
     }
-    let outside = system.solve(layer, flow, &c, &r)?;
+    let outside = system.solve(layer, &influence, &c, &r)?;
     let changes = system.changes(layer, &outside);
     let (part, change) = take(layer, &changes, &c, &outside, limit);
     change.is_finite().then_some(Progress { speed, layer: system.worst, change, part })
@@ -179,15 +186,14 @@ impl Chains {
     }
 
     /// Solves for W.
-    fn solve(&self, layer: &Layer, flow: &Flow, c: &[f64], r: &[f64]) -> Option<Vec<f64>> {
+    fn solve(&self, layer: &Layer, influence: &Matrix, c: &[f64], r: &[f64]) -> Option<Vec<f64>> {
         let total = layer.total();
         let mut system = Matrix::zeros(total, total);
         let mut right = r.to_vec();
         let mut line = vec![0.0; total + 1];
         for i in 0..total {
             line.fill(0.0);
-            let influence = flow.by_mass.row(i);
-            for (j, effect) in influence.iter().enumerate() {
+            for (j, effect) in influence.row(i).iter().enumerate() {
                 let mut e = layer.sign(i) * effect * layer.sign(j);
                 if i == j {
                     e -= c[i];

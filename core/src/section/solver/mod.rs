@@ -33,4 +33,6 @@ pub use settings::{Settings, SolverError, USUAL_NODES};
 pub use sweep::{Solved, State, Sweep, sweep};
 
 #[cfg(test)]
+mod plates;
+#[cfg(test)]
 mod tests;

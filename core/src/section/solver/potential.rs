@@ -263,6 +263,10 @@ pub(super) struct Flow {
     pub(super) by_mass: Matrix,
     /// The wake, its first node in the middle of the trailing edge.
     pub(super) wake: Strip,
+    /// Change of speed with the strength of vortices on the nodes of the wake.
+    pub(super) by_swirl: Matrix,
+    /// Arc length and direction of the wake, positive upwards, at the middles of its elements.
+    course: Vec<[f64; 2]>,
 }
 
 impl Flow {
@@ -288,8 +292,100 @@ impl Flow {
             still.push(speed);
             by_mass.row_mut(n + i).copy_from_slice(&row);
         }
-        Self { alpha_rad, still, by_mass, wake }
+        let by_swirl = swirl(potential, &wake);
+        let course = wake.course();
+        Self { alpha_rad, still, by_mass, wake, by_swirl, course }
     }
+
+    /// Change of speed with mass defect, the curvature of the wake included: a curved wake carries less momentum than the flow
+    /// it stands for, which vortices of strength `-curvature (m + u theta)` make good. `shape` is the shape parameter of the
+    /// wake at its nodes, from which `u theta = m/H`.
+    ///
+    /// # References
+    /// Lock, Williams, "Viscous-inviscid interactions in external aerodynamics", Prog. Aerospace Sci. 24, 1987.
+    pub(super) fn influence(&self, shape: &[f64], reach: f64) -> Matrix {
+        let mut influence = self.by_mass.clone();
+        let body = influence.rows - shape.len();
+        let mut run = 0.0;
+        let weights: Vec<f64> = (0..shape.len())
+            .map(|j| {
+                if j > 0 {
+                    run += self.wake.length(j - 1);
+                }
+                self.curvature(run, reach) * (1.0 + 1.0 / shape[j])
+            })
+            .collect();
+        for i in 0..influence.rows {
+            let row = &mut influence.row_mut(i)[body..];
+            for ((entry, weight), effect) in row.iter_mut().zip(&weights).zip(self.by_swirl.row(i)) {
+                *entry -= effect * weight;
+            }
+        }
+        influence
+    }
+
+    /// Curvature of the wake at an arc length, the mean over `reach` to both sides as far as the wake goes.
+    fn curvature(&self, s: f64, reach: f64) -> f64 {
+        let last = self.course[self.course.len() - 1][0];
+        let (from, to) = ((s - reach).max(0.0), (s + reach).min(last));
+        if to - from < 1e-9 { 0.0 } else { (interpolate(&self.course, to) - interpolate(&self.course, from)) / (to - from) }
+    }
+}
+
+/// Linear between the points of a table, held outside.
+fn interpolate(table: &[[f64; 2]], x: f64) -> f64 {
+    let k = table.partition_point(|row| row[0] <= x).clamp(1, table.len() - 1);
+    let ([x0, y0], [x1, y1]) = (table[k - 1], table[k]);
+    y0 + (y1 - y0) * ((x - x0) / (x1 - x0)).clamp(0.0, 1.0)
+}
+
+/// Speeds for a unit of vortex strength at each node of the wake, the outline answering.
+fn swirl(potential: &Potential, wake: &Strip) -> Matrix {
+    let (n, w) = (potential.count(), wake.nodes.len());
+    let mut effect = Matrix::zeros(n, w);
+    for (i, &p) in potential.body.nodes.iter().enumerate() {
+        let row = effect.row_mut(i);
+        for (j, element) in wake.elements.iter().enumerate() {
+            let stream = element.vortex_stream(p);
+            row[j] += stream[0];
+            row[j + 1] += stream[1];
+        }
+    }
+    let mut response = Matrix::zeros(n, w);
+    for j in 0..w {
+        let mut right: Vec<f64> = (0..n).map(|i| -effect.row(i)[j]).collect();
+        if potential.sharp {
+            right[n - 1] = 0.0;
+        }
+        // The vorticity of both sides runs on into that of the wake.
+        right.push(if j == 0 { 1.0 } else { 0.0 });
+        for (i, gamma) in potential.factors.solve(&right).into_iter().take(n).enumerate() {
+            response.row_mut(i)[j] = gamma;
+        }
+    }
+    let mut speeds = Matrix::zeros(n + w, w);
+    for i in 0..n {
+        add_scaled(speeds.row_mut(i), -1.0, response.row(i));
+    }
+    // Half the jump at the trailing edge belongs to each side of the wake.
+    let edge = speeds.row(n - 1).to_vec();
+    speeds.row_mut(n).copy_from_slice(&edge);
+    speeds.row_mut(n)[0] += 0.5;
+    for i in 1..w {
+        let (p, t) = (wake.nodes[i], wake.tangent(i));
+        let along = |v: [f64; 2]| v[0] * t[0] + v[1] * t[1];
+        let by_vortex = potential.vortex_row(p, t);
+        let row = speeds.row_mut(n + i);
+        for (j, element) in wake.elements.iter().enumerate() {
+            let effect = element.vortex_velocity(p);
+            row[j] += along(effect[0]);
+            row[j + 1] += along(effect[1]);
+        }
+        for (j, weight) in by_vortex.iter().enumerate() {
+            add_scaled(row, *weight, response.row(j));
+        }
+    }
+    speeds
 }
 
 /// Speed along the wake at its node `i`, and the effect on it of every mass defect.
@@ -319,6 +415,18 @@ fn wake_row(
 }
 
 impl Strip {
+    /// Arc length and direction at the middles of the elements.
+    fn course(&self) -> Vec<[f64; 2]> {
+        let (mut run, first) = (0.0, self.elements[0].along());
+        let middle = |e: &Element| {
+            let along = e.along();
+            let turn = (first[0] * along[1] - first[1] * along[0]).atan2(first[0] * along[0] + first[1] * along[1]);
+            run += e.length();
+            [run - 0.5 * e.length(), turn]
+        };
+        self.elements.iter().map(middle).collect()
+    }
+
     /// Direction at a node: the mean of its two elements.
     fn tangent(&self, i: usize) -> [f64; 2] {
         let last = self.elements.len() - 1;

@@ -94,6 +94,7 @@ pub(crate) fn polars(tasks: &[Task], polars: &[Vec<Solved>]) -> String {
                     p.cl, p.cd, p.cm, p.xtr_upper, p.xtr_lower
                 ),
                 State::Failed => writeln!(text, ",,,,,failed"),
+                State::Stalled => writeln!(text, ",,,,,stalled"),
             };
         }
     }
