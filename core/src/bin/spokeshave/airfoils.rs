@@ -19,8 +19,6 @@ use crate::input::{Outcome, Stop};
 use catalogue::{CATALOGUE, Entry};
 use record::Share;
 
-/// Thickness ratios of the tables.
-const THICKNESS: [f64; 8] = [0.06, 0.08, 0.10, 0.12, 0.15, 0.18, 0.21, 0.24];
 /// Reynolds numbers of the tables.
 const REYNOLDS: [f64; 10] = [30e3, 50e3, 80e3, 130e3, 220e3, 400e3, 750e3, 1.5e6, 3e6, 6e6];
 /// Amplification exponents: quiet air and disturbed air.
@@ -68,10 +66,10 @@ pub(crate) struct Task {
     pub(crate) settings: Settings,
 }
 
-fn tasks() -> Vec<Task> {
+fn tasks(thickness: &[f64]) -> Vec<Task> {
     let mut tasks = Vec::new();
     for n_crit in N_CRIT {
-        for thickness_ratio in THICKNESS {
+        for &thickness_ratio in thickness {
             for reynolds in REYNOLDS {
                 tasks.push(Task { thickness_ratio, settings: Settings::free(reynolds, n_crit) });
             }
@@ -87,10 +85,10 @@ fn angles_deg() -> Vec<f64> {
 
 fn rebuild(entry: &Entry, folder: &Path, threads: usize) -> Result<(), Stop> {
     let base = (entry.draw)().map_err(|e| Stop::BadInput(format!("{}: {e}", entry.name)))?;
-    let drawn: Result<Vec<Outline>, _> = THICKNESS.iter().map(|&t| base.scaled_to(t)).collect();
+    let drawn: Result<Vec<Outline>, _> = entry.thickness.iter().map(|&t| base.scaled_to(t)).collect();
     let drawn = drawn.map_err(|e| Stop::BadInput(format!("{}: {e}", entry.name)))?;
-    let tasks = tasks();
-    let polars = compute(entry.name, &tasks, &drawn, threads)?;
+    let tasks = tasks(entry.thickness);
+    let polars = compute(entry, &tasks, &drawn, threads)?;
     let share = Share::of(&tasks, &polars);
     let write = |name: &str, text: String| {
         let path = folder.join(name);
@@ -106,7 +104,13 @@ fn rebuild(entry: &Entry, folder: &Path, threads: usize) -> Result<(), Stop> {
 }
 
 /// Runs all sweeps, some at a time; the results stand in the order of the tasks.
-fn compute(name: &str, tasks: &[Task], drawn: &[Outline], threads: usize) -> Result<Vec<Vec<Solved>>, Stop> {
+fn compute(
+    entry: &Entry,
+    tasks: &[Task],
+    drawn: &[Outline],
+    threads: usize,
+) -> Result<Vec<Vec<Solved>>, Stop> {
+    let name = entry.name;
     let (next, done) = (AtomicUsize::new(0), AtomicUsize::new(0));
     let results: Mutex<Vec<Option<Vec<Solved>>>> = Mutex::new(vec![None; tasks.len()]);
     let angles = angles_deg();
@@ -114,7 +118,7 @@ fn compute(name: &str, tasks: &[Task], drawn: &[Outline], threads: usize) -> Res
         loop {
             let index = next.fetch_add(1, Ordering::Relaxed);
             let Some(task) = tasks.get(index) else { return Ok(()) };
-            let at = THICKNESS.iter().position(|&t| t == task.thickness_ratio).unwrap_or(0);
+            let at = entry.thickness.iter().position(|&t| t == task.thickness_ratio).unwrap_or(0);
             let points = sweep(&drawn[at], &task.settings, &angles, |_, _, _| ControlFlow::Continue(()))
                 .map_err(|e| Stop::BadInput(format!("{name}: {e}")))?;
             if let Ok(mut results) = results.lock() {

@@ -28,7 +28,8 @@ fn friction(gas: &Gas, kind: Kind, state: &State) -> f64 {
 #[test]
 fn validate_plate_laminar_blasius() {
     let gas = Gas::new(1e6, 0.0);
-    let stations: Vec<(f64, f64)> = (0..=60).map(|k| (0.01 * 100_f64.powf(f64::from(k) / 60.0), 1.0)).collect();
+    let stations: Vec<(f64, f64)> =
+        (0..=60).map(|k| (0.01 * 100_f64.powf(f64::from(k) / 60.0), 1.0)).collect();
     let theta = 0.6641 * (0.01_f64 / 1e6).sqrt();
     // The start is 5 % wrong in shape: it must be forgotten.
     let states = march(&gas, Kind::Laminar, [theta, 2.46 * theta, 0.0, 1.0], &stations);
@@ -42,7 +43,8 @@ fn validate_plate_laminar_blasius() {
 #[test]
 fn validate_plate_transition_by_growth() {
     let gas = Gas::new(6e6, 0.0);
-    let stations: Vec<(f64, f64)> = (0..=160).map(|k| (0.01 * 100_f64.powf(f64::from(k) / 160.0), 1.0)).collect();
+    let stations: Vec<(f64, f64)> =
+        (0..=160).map(|k| (0.01 * 100_f64.powf(f64::from(k) / 160.0), 1.0)).collect();
     let theta = 0.6641 * (0.01_f64 / 6e6).sqrt();
     let states = march(&gas, Kind::Laminar, [theta, 2.591 * theta, 0.0, 1.0], &stations);
     let at = states.iter().position(|s| s[2] >= 9.0).expect("transition on the plate");
@@ -54,7 +56,8 @@ fn validate_plate_transition_by_growth() {
 #[test]
 fn validate_plate_turbulent_karman_schoenherr() {
     let gas = Gas::new(2e7, 0.0);
-    let stations: Vec<(f64, f64)> = (0..=120).map(|k| (0.01 * 100_f64.powf(f64::from(k) / 120.0), 1.0)).collect();
+    let stations: Vec<(f64, f64)> =
+        (0..=120).map(|k| (0.01 * 100_f64.powf(f64::from(k) / 120.0), 1.0)).collect();
     let theta = 400.0 / 2e7;
     let mut checked = 0;
     for state in march(&gas, Kind::Turbulent, [theta, 1.5 * theta, 0.05, 1.0], &stations) {
@@ -88,12 +91,14 @@ fn validate_similar_flows_falkner_skan() {
         let m = 0.5 * (g - f) / ((1.0 - h) * f - (g - f) * (1.5 + h));
         (2.0 * m / (m + 1.0), f)
     };
-    let separation = (380..440).map(|k| f64::from(k) / 100.0).find(|&h| beta(h).1 <= 0.0).expect("separation");
+    let separation =
+        (380..440).map(|k| f64::from(k) / 100.0).find(|&h| beta(h).1 <= 0.0).expect("separation");
     assert!((separation / 4.03 - 1.0).abs() < 0.05, "H {separation}");
     assert!((beta(separation).0 + 0.1988).abs() < 0.01, "beta {}", beta(separation).0);
     for (exact, wanted) in [(2.216, 1.0), (2.591, 0.0), (2.802, -0.1)] {
         // beta falls as H rises: the H of the closure at this beta.
-        let h = (215..400).map(|k| 0.01 * f64::from(k)).find(|&h| beta(h).0 < wanted).expect("a similar flow");
+        let h =
+            (215..400).map(|k| 0.01 * f64::from(k)).find(|&h| beta(h).0 < wanted).expect("a similar flow");
         assert!((h / exact - 1.0).abs() < 0.02, "H {h} for beta {wanted}");
     }
 }

@@ -328,7 +328,11 @@ impl Flow {
     fn curvature(&self, s: f64, reach: f64) -> f64 {
         let last = self.course[self.course.len() - 1][0];
         let (from, to) = ((s - reach).max(0.0), (s + reach).min(last));
-        if to - from < 1e-9 { 0.0 } else { (interpolate(&self.course, to) - interpolate(&self.course, from)) / (to - from) }
+        if to - from < 1e-9 {
+            0.0
+        } else {
+            (interpolate(&self.course, to) - interpolate(&self.course, from)) / (to - from)
+        }
     }
 }
 
@@ -420,7 +424,8 @@ impl Strip {
         let (mut run, first) = (0.0, self.elements[0].along());
         let middle = |e: &Element| {
             let along = e.along();
-            let turn = (first[0] * along[1] - first[1] * along[0]).atan2(first[0] * along[0] + first[1] * along[1]);
+            let turn =
+                (first[0] * along[1] - first[1] * along[0]).atan2(first[0] * along[0] + first[1] * along[1]);
             run += e.length();
             [run - 0.5 * e.length(), turn]
         };

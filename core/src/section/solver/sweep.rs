@@ -52,8 +52,14 @@ pub struct Solved {
 
 /// Most iterations of one attempt.
 const ITERATIONS: usize = 30;
-/// Failures in a row after which a direction of the sweep is given up.
-const GIVE_UP: usize = 3;
+/// Failures in a row after which a direction of the sweep is given up: past the largest lift, and before it.
+const GIVE_UP: [usize; 2] = [3, 10];
+/// Nodes added for the second try at an angle that failed: what fails is often a transition point just at a node.
+const OTHER_NODES: usize = 9;
+/// Least drag that is believed, over that of a laminar plate of two sides, `2.656/sqrt(Re)`.
+const LEAST_DRAG: f64 = 0.7;
+/// Least speed at the end of the wake: a second solution exists in which the wake widens again and stands still.
+const LEAST_WAKE_SPEED: f64 = 0.7;
 /// Levels of halving of a step in angle.
 const HALVINGS: u32 = 2;
 /// Rise of the pressure coefficient from the suction peak to the trailing edge at which the flow leaves from the nose. The
@@ -65,6 +71,7 @@ const NOSE_STALL_RISE: f64 = 14.0;
 #[derive(Debug, Clone)]
 pub struct Sweep {
     potential: Potential,
+    other: Potential,
     course: Course,
     angles_deg: Vec<f64>,
     start: usize,
@@ -74,6 +81,8 @@ pub struct Sweep {
     last: Option<Solution>,
     failures: usize,
     points: Vec<Solved>,
+    /// Largest size of lift in the present direction.
+    peak: f64,
 }
 
 /// A converged flow.
@@ -92,9 +101,11 @@ impl Sweep {
     pub fn new(outline: &Outline, settings: &Settings, angles_deg: &[f64]) -> Result<Self, SolverError> {
         settings.check()?;
         check_angles(angles_deg)?;
-        let nodes = spacing::nodes(outline, settings.nodes);
-        let singular = || SolverError::Singular { name: outline.name().to_string() };
-        let potential = Potential::new(nodes).ok_or_else(singular)?;
+        let flow = |nodes: usize| {
+            let singular = || SolverError::Singular { name: outline.name().to_string() };
+            Potential::new(spacing::nodes(outline, nodes)).ok_or_else(singular)
+        };
+        let (potential, other) = (flow(settings.nodes)?, flow(settings.nodes + OTHER_NODES)?);
         let course = Course {
             gas: Gas::new(settings.reynolds, settings.mach),
             n_crit: settings.n_crit,
@@ -107,6 +118,7 @@ impl Sweep {
             (0..angles_deg.len()).min_by(|&i, &j| nearest(&angles_deg[i], &angles_deg[j])).unwrap_or(0);
         Ok(Self {
             potential,
+            other,
             course,
             angles_deg: angles_deg.to_vec(),
             start,
@@ -115,6 +127,7 @@ impl Sweep {
             last: None,
             failures: 0,
             points: Vec::new(),
+            peak: 0.0,
         })
     }
 
@@ -122,14 +135,14 @@ impl Sweep {
     pub fn advance(&mut self) -> Option<Solved> {
         let count = self.angles_deg.len();
         let upward = count - self.start;
-        if self.failures >= GIVE_UP && self.next < upward {
+        if self.gives_up() && self.next < upward {
             self.next = upward;
         }
         if self.next == upward {
             self.last.clone_from(&self.anchor);
-            self.failures = 0;
+            (self.failures, self.peak) = (0, 0.0);
         }
-        if self.next >= count || (self.failures >= GIVE_UP && self.next > upward) {
+        if self.next >= count || self.gives_up() {
             return None;
         }
         let index = if self.next < upward { self.start + self.next } else { count - 1 - self.next };
@@ -138,6 +151,14 @@ impl Sweep {
         self.failures = if point.state == State::Converged { 0 } else { self.failures + 1 };
         self.points.push(point);
         Some(point)
+    }
+
+    /// Whether the present direction is not worth going on with.
+    fn gives_up(&self) -> bool {
+        let lift = self.last.as_ref().map_or(0.0, |last| last.cl.abs());
+        let stalled = self.points.last().is_some_and(|p| p.state == State::Stalled);
+        let past = stalled || lift > 0.7 && lift < 0.98 * self.peak;
+        self.failures >= GIVE_UP[usize::from(!past)]
     }
 
     /// Angles done and angles asked for; a direction that was given up counts as done.
@@ -173,10 +194,13 @@ impl Sweep {
         if point.state == State::Stalled {
             return Solved { state: State::Stalled, ..failed };
         }
-        if self.anchor.is_none() {
-            self.anchor = Some(solution.clone());
+        self.peak = self.peak.max(solution.cl.abs());
+        if solution.layer.course.body == self.course.body {
+            if self.anchor.is_none() {
+                self.anchor = Some(solution.clone());
+            }
+            self.last = Some(solution);
         }
-        self.last = Some(solution);
         Solved { alpha_deg, iterations, residual, ..point }
     }
 }
@@ -204,18 +228,15 @@ struct Work<'a> {
 
 impl Work<'_> {
     fn find(&mut self, alpha_rad: f64) -> Option<(Solution, Solved)> {
-        let flow = Flow::new(&self.sweep.potential, alpha_rad);
-        let last = self.sweep.last.clone();
-        if let Some(last) = &last
-            && let Some(found) = self.warm(last, &flow, 1.0)
-        {
-            return Some(found);
-        }
-        if let Some(found) = self.cold(&flow) {
-            return Some(found);
-        }
-        let last = last?;
-        self.warm(&last, &flow, 0.35).or_else(|| self.halved(&last, &flow, HALVINGS))
+        let sweep = self.sweep;
+        let flow = Flow::new(&sweep.potential, alpha_rad);
+        let last = sweep.last.as_ref();
+        let found = last.and_then(|last| self.warm(last, &flow, 1.0));
+        found
+            .or_else(|| self.cold(&sweep.potential, &flow))
+            .or_else(|| last.and_then(|last| self.warm(last, &flow, 0.35)))
+            .or_else(|| last.and_then(|last| self.halved(last, &flow, HALVINGS)))
+            .or_else(|| self.cold(&sweep.other, &Flow::new(&sweep.other, alpha_rad)))
     }
 
     /// From the neighbour, its speeds moved by what potential flow says of the change of angle.
@@ -226,16 +247,16 @@ impl Work<'_> {
         }
         layer.follow_stagnation();
         place_wake(&mut layer, &flow.wake);
-        self.converge(layer, flow, limit, Some(last))
+        self.converge(layer, &self.sweep.potential, flow, limit)
     }
 
     /// From potential flow alone.
-    fn cold(&mut self, flow: &Flow) -> Option<(Solution, Solved)> {
-        let body = &self.sweep.potential.body;
-        let (x, arc) = stations(body, &flow.wake);
-        let mut layer = Layer::new(self.sweep.course.clone(), x, arc, &flow.still);
+    fn cold(&mut self, potential: &Potential, flow: &Flow) -> Option<(Solution, Solved)> {
+        let (x, arc) = stations(&potential.body, &flow.wake);
+        let course = Course { body: potential.count(), ..self.sweep.course.clone() };
+        let mut layer = Layer::new(course, x, arc, &flow.still);
         layer.march(&Drive::Cold);
-        self.converge(layer, flow, 1.0, self.sweep.last.as_ref())
+        self.converge(layer, potential, flow, 1.0)
     }
 
     /// By way of the angle half-way.
@@ -255,9 +276,9 @@ impl Work<'_> {
     fn converge(
         &mut self,
         mut layer: Layer,
+        potential: &Potential,
         flow: &Flow,
         limit: f64,
-        neighbour: Option<&Solution>,
     ) -> Option<(Solution, Solved)> {
         let mut settled = f64::INFINITY;
         for _ in 0..ITERATIONS {
@@ -265,7 +286,7 @@ impl Work<'_> {
             let Progress { speed, layer: worst, change, part } = iterate(&mut layer, flow, settled, limit)?;
             self.residual = speed;
             if speed < TOLERANCE && worst < TOLERANCE && part >= 1.0 && change == settled {
-                return self.judge(layer, flow, neighbour);
+                return self.judge(layer, potential, flow);
             }
             settled = if part >= limit { change } else { f64::INFINITY };
         }
@@ -273,10 +294,12 @@ impl Work<'_> {
     }
 
     /// Forces of a converged flow, if they can be believed.
-    fn judge(&self, layer: Layer, flow: &Flow, neighbour: Option<&Solution>) -> Option<(Solution, Solved)> {
-        let f = forces(&self.sweep.potential.body, &layer, flow.alpha_rad);
-        let fair = f.cl.abs() < 4.0 && f.cd > 0.0 && f.cd < 0.6 && f.cm.is_finite();
-        let jump = neighbour.is_some_and(|n| {
+    fn judge(&self, layer: Layer, potential: &Potential, flow: &Flow) -> Option<(Solution, Solved)> {
+        let f = forces(&potential.body, &layer, flow.alpha_rad);
+        let least = LEAST_DRAG * 2.656 / layer.course.gas.reynolds.sqrt();
+        let runs_out = layer.state[layer.total() - 1][3] > LEAST_WAKE_SPEED;
+        let fair = runs_out && f.cl.abs() < 4.0 && f.cd > least && f.cd < 0.6 && f.cm.is_finite();
+        let jump = self.sweep.last.as_ref().is_some_and(|n| {
             let turn_deg = (flow.alpha_rad - n.flow.alpha_rad).to_degrees().abs();
             (f.cl - n.cl).abs() > 0.15 + 0.2 * turn_deg
         });

@@ -158,3 +158,17 @@ fn odd_outlines_come_to_an_end() {
         }
     }
 }
+/// At Re 80,000 and no incidence a solution exists whose wake widens without end and whose drag vanishes: it must not be taken.
+#[test]
+fn drag_is_never_less_than_that_of_a_plate() {
+    let section = naca_four_digit(0, 0, 0.12).expect("drawn");
+    let angles: Vec<f64> = (-6..=12).map(|k| 0.5 * f64::from(k)).collect();
+    let points = polar(&section, &Settings::free(8e4, 9.0), &angles);
+    let good = points.iter().filter(|p| p.state == State::Converged);
+    assert!(good.clone().all(|p| p.cd > 0.7 * 2.656 / 8e4_f64.sqrt()));
+    println!("{} of {}", good.clone().count(), points.len());
+    for p in &points {
+        println!("{} {} {}", p.alpha_deg, p.cl, p.cd);
+    }
+    assert!(good.count() >= 15);
+}

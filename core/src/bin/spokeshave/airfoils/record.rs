@@ -7,7 +7,7 @@ use spokeshave::section::outline::Outline;
 use spokeshave::section::solver::{Settings, Solved, State, USUAL_NODES};
 
 use super::catalogue::Entry;
-use super::{N_CRIT, REYNOLDS, THICKNESS, Task, angles_deg};
+use super::{N_CRIT, REYNOLDS, Task, angles_deg};
 
 /// Date of the method: changed by hand with every change of the solver that changes figures.
 const METHOD_DATE: &str = "2026-12-01";
@@ -142,7 +142,7 @@ pub(crate) fn family(entry: &Entry, drawn: &[Outline], share: &Share) -> String 
         let angle_deg = outline.face_angle_rad()?.to_degrees();
         Some(FaceAngle { thickness_ratio: *t, angle_deg: (angle_deg * 1e3).round() / 1e3 })
     };
-    let face_angle_deg: Vec<FaceAngle> = THICKNESS.iter().zip(drawn).filter_map(angle).collect();
+    let face_angle_deg: Vec<FaceAngle> = entry.thickness.iter().zip(drawn).filter_map(angle).collect();
     let angles = angles_deg();
     let file = FamilyFile {
         name: entry.name,
@@ -158,7 +158,7 @@ pub(crate) fn family(entry: &Entry, drawn: &[Outline], share: &Share) -> String 
         method: METHOD,
         method_date: METHOD_DATE,
         settings: TableSettings {
-            thickness_ratio: THICKNESS.to_vec(),
+            thickness_ratio: entry.thickness.to_vec(),
             reynolds: REYNOLDS.to_vec(),
             n_crit: N_CRIT.to_vec(),
             mach: 0.0,
