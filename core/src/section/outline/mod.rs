@@ -8,6 +8,7 @@
 //! Limits: the outline is single, closed but for the trailing edge (at most 6 % of the chord open), 1 % to 60 % thick.
 
 mod check;
+mod edge;
 mod error;
 mod face;
 mod families;
@@ -133,6 +134,17 @@ impl Outline {
     /// the checks of the new outline.
     pub fn scaled_to(&self, thickness_ratio: f64) -> Result<Self, OutlineError> {
         scale::scaled_to(self, thickness_ratio)
+    }
+
+    /// The same section with its trailing edge left `thickness` chords thick, as carved edges are.
+    ///
+    /// The thickness is added behind the thickest place, with the square of the distance from it: on the back alone where the
+    /// section has a flat face, on both sides otherwise.
+    ///
+    /// # Errors
+    /// [`OutlineError::Figure`] for less than the outline has or more than 5 % of the chord.
+    pub fn with_edge_thickness(&self, thickness: f64) -> Result<Self, OutlineError> {
+        edge::with_edge_thickness(self, thickness)
     }
 
     pub(crate) fn curve(&self) -> &Curve {

@@ -128,3 +128,15 @@ fn any_list_gives_an_outline_or_an_error() {
         }
     }
 }
+
+#[test]
+fn a_thick_edge_keeps_the_face() {
+    for section in [clark_y(), naca_four_digit(4, 4, 0.12)] {
+        let section = section.expect("drawn");
+        let thick = section.with_edge_thickness(0.012).expect("thicker");
+        assert!((thick.measures().edge_thickness - 0.012).abs() < 2e-4);
+        assert!((thick.thickness_ratio() - section.thickness_ratio()).abs() < 1e-3);
+        assert_eq!(thick.face().is_some(), section.face().is_some());
+        assert!(section.with_edge_thickness(0.2).is_err());
+    }
+}

@@ -13,6 +13,8 @@
 //! # References
 //! Drela, Giles, AIAA J. 25(10), 1987; Drela, Lecture Notes in Engineering 54, 1989; Veldman, AIAA J. 19(1), 1981.
 
+mod attempt;
+mod chains;
 mod closure;
 mod couple;
 mod dense;
@@ -28,6 +30,7 @@ mod singularity;
 mod spacing;
 mod station;
 mod sweep;
+mod wake;
 
 pub use settings::{Settings, SolverError, USUAL_NODES};
 pub use sweep::{Solved, State, Sweep, sweep};
