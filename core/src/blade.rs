@@ -10,7 +10,7 @@ use std::sync::Arc;
 
 use crate::curve::Curve;
 use crate::job::{AngleReference, Job, Propeller, Station};
-use crate::section::{About, Family, TableError, library};
+use crate::section::{Family, TableError, library};
 
 /// What the blade is at one radius.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -195,14 +195,7 @@ fn family(job: &Job, station: usize, name: &str) -> Result<Arc<Family>, BladeErr
             .cloned()
             .ok_or_else(|| BladeError::UnknownSection { station, name: name.to_string() });
     };
-    let about = About {
-        name: own.name.clone(),
-        title: own.name.clone(),
-        origin: own.origin.clone(),
-        face_angle_deg: own.face_angle_deg.map(|a| (0.0, a)).into_iter().collect(),
-        korn_factor: own.korn_factor,
-    };
-    Family::new(about, &own.polars)
+    Family::new(own.about(), &own.polars)
         .map(Arc::new)
         .map_err(|error| BladeError::Table { name: name.to_string(), error })
 }

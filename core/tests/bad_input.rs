@@ -117,3 +117,37 @@ fn values_that_are_not_finite_are_refused_however_they_come() {
         assert!(paths.iter().any(|p| p == path), "{path} is not among {paths:?}");
     }
 }
+
+#[test]
+fn wrong_outlines_and_faces_of_own_sections_are_named() {
+    let row = |i: u32| json!({"alpha_deg": i, "cl": 0.1 * f64::from(i), "cd": 0.01});
+    let points: Vec<Value> = (0..6).map(row).collect();
+    let with = |key: &str, value: Value| {
+        let mut section = json!({"name": "own", "polars": [{"points": points}]});
+        section[key] = value;
+        json!([section])
+    };
+    let face = |t: f64, a: f64| json!({"thickness_ratio": t, "angle_deg": a});
+    let both = {
+        let mut sections = with("face_angle_deg", json!(2.0));
+        sections[0]["face_angles"] = json!([face(0.1, 2.0)]);
+        sections
+    };
+    let cases = [
+        (
+            with("outline", json!([[1.0, 0.0], [0.0, 0.0]])),
+            "sections[0].outline: 2 points: 2 points: at least",
+        ),
+        (with("outline", json!([[1.0, 0.0, 3.0]])), "sections[0].outline[0]"),
+        (with("outline", json!("round")), "sections[0].outline: invalid type"),
+        (with("face_angles", json!([face(0.2, 2.0), face(0.1, 1.0)])), "face_angles[1].thickness_ratio: 0.1"),
+        (with("face_angles", json!([face(0.1, 99.0)])), "sections[0].face_angles[0].angle_deg: 99"),
+        (with("face_angles", json!([{"angle": 1}])), "sections[0].face_angles[0].angle: unknown field"),
+        (both, "sections[0].face_angles: given beside face_angle_deg"),
+        (with("shape", json!(1)), "sections[0].shape: unknown field"),
+    ];
+    for (sections, expected) in cases {
+        let message = refusal("/sections", sections);
+        assert!(message.contains(expected), "{message:?} has no {expected:?}");
+    }
+}

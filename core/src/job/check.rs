@@ -156,14 +156,55 @@ fn check_electric(found: &mut Found, e: &Electric) {
 fn check_sections(found: &mut Found, sections: &[Section]) {
     found.count("sections", sections.len(), 0..=MOST_SECTIONS);
     for (i, s) in sections.iter().enumerate() {
-        text(found, &format!("sections[{i}].name"), &s.name, 1);
+        check_section(found, i, s);
         if sections[..i].iter().any(|other| other.name == s.name) {
             found.refuse(format!("sections[{i}].name"), format!("\"{}\" twice", s.name), "a name used once");
         }
-        found.optional(format!("sections[{i}].face_angle_deg"), s.face_angle_deg, -20.0..=20.0, "degrees");
-        found.range(format!("sections[{i}].korn_factor"), s.korn_factor, 0.7..=1.0, "");
-        if let Err(e) = check_polars(&s.polars) {
-            found.refuse(format!("sections[{i}].{}", e.place), e.found, e.allowed);
+    }
+}
+
+/// Every problem of a section by itself.
+pub(super) fn section_problems(section: &Section) -> Vec<Problem> {
+    let mut found = Found::default();
+    check_section(&mut found, 0, section);
+    found.0
+}
+
+fn check_section(found: &mut Found, i: usize, s: &Section) {
+    text(found, &format!("sections[{i}].name"), &s.name, 1);
+    found.optional(format!("sections[{i}].face_angle_deg"), s.face_angle_deg, -20.0..=20.0, "degrees");
+    check_faces(found, i, s);
+    if let Err(e) = s.drawn() {
+        let points = format!("{} points", s.outline.len());
+        found.refuse(
+            format!("sections[{i}].outline"),
+            format!("{points}: {e}"),
+            "a section's outline, or none",
+        );
+    }
+    found.range(format!("sections[{i}].korn_factor"), s.korn_factor, 0.7..=1.0, "");
+    if let Err(e) = check_polars(&s.polars) {
+        found.refuse(format!("sections[{i}].{}", e.place), e.found, e.allowed);
+    }
+}
+
+/// Angles of the face by rising thickness, and not beside the single one.
+fn check_faces(found: &mut Found, i: usize, s: &Section) {
+    let at = |j: usize, name: &str| format!("sections[{i}].face_angles[{j}].{name}");
+    if s.face_angle_deg.is_some() && !s.face_angles.is_empty() {
+        found.refuse(format!("sections[{i}].face_angles"), "given beside face_angle_deg", "one of the two");
+    }
+    found.count(&format!("sections[{i}].face_angles"), s.face_angles.len(), 0..=MOST_SECTIONS);
+    for (j, face) in s.face_angles.iter().enumerate() {
+        found.range(at(j, "thickness_ratio"), face.thickness_ratio, 0.005..=1.0, "of the chord");
+        found.range(at(j, "angle_deg"), face.angle_deg, -20.0..=20.0, "degrees");
+        if j > 0 && face.thickness_ratio - s.face_angles[j - 1].thickness_ratio < 1e-9 {
+            let before = s.face_angles[j - 1].thickness_ratio;
+            found.refuse(
+                at(j, "thickness_ratio"),
+                face.thickness_ratio,
+                format!("above {before}, the one before"),
+            );
         }
     }
 }
@@ -236,10 +277,8 @@ fn check_section_name(found: &mut Found, path: String, s: &Station, job: &Job) {
         found.refuse(path, format!("\"{}\"", s.section), format!("one of {}", known_names(job)));
         return;
     }
-    let has_face = own.map_or_else(
-        || shipped.is_some_and(|f| !f.about.face_angle_deg.is_empty()),
-        |own| own.face_angle_deg.is_some(),
-    );
+    let has_face =
+        own.map_or_else(|| shipped.is_some_and(|f| !f.about.face_angle_deg.is_empty()), Section::has_face);
     if job.propeller.angle_reference == AngleReference::FlatFace && !has_face {
         let allowed = "a section with a flat face while angle_reference is flat-face";
         found.refuse(path, format!("\"{}\" has no flat face", s.section), allowed);

@@ -5,7 +5,7 @@
 use serde::{Deserialize, Serialize};
 
 use super::by_kind::by_kind;
-use crate::section::Polar;
+use crate::section::{FaceAngle, Polar};
 
 /// A whole job.
 #[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
@@ -394,6 +394,13 @@ pub struct Section {
     /// Angle from the flat face up to the chord line, degrees; needed when angles are measured on the face.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub face_angle_deg: Option<f64>,
+    /// The same angle by rising thickness, in place of `face_angle_deg`, for polars of several thicknesses.
+    #[serde(default, skip_serializing_if = "Vec::is_empty")]
+    pub face_angles: Vec<FaceAngle>,
+    /// Points of the outline in chords, from one side of the trailing edge round the nose to the other, so that it can
+    /// be drawn; left out when it is not known.
+    #[serde(default, skip_serializing_if = "Vec::is_empty")]
+    pub outline: Vec<[f64; 2]>,
     /// Korn factor for drag divergence.
     #[serde(default = "ordinary_korn")]
     pub korn_factor: f64,
@@ -442,6 +449,6 @@ fn one() -> u32 {
 fn unity() -> f64 {
     1.0
 }
-fn ordinary_korn() -> f64 {
+pub(super) fn ordinary_korn() -> f64 {
     0.87
 }

@@ -6,6 +6,7 @@ mod check;
 mod demo;
 mod document;
 mod error;
+mod own;
 
 pub use check::section_name_known;
 pub use demo::{DEMOS, Demo};

@@ -3,11 +3,14 @@
 mod best;
 mod extend;
 mod family;
+pub mod import;
 mod library;
 mod local;
+pub mod make;
 pub mod outline;
 mod polar;
 pub mod solver;
+mod table;
 
 pub use best::{BAND_SHARE, Best, best, working_band};
 pub use extend::{BLADE_ASPECT_RATIO, Coefficients, Extension};
@@ -16,3 +19,4 @@ pub use library::{Library, library};
 pub use local::{Local, Situation};
 pub(crate) use polar::check_polars;
 pub use polar::{FEWEST_POINTS, MOST_POINTS, MOST_POLARS, Polar, PolarPoint, TableError};
+pub use table::{FaceAngle, Table};

@@ -40,7 +40,7 @@ impl JobSource {
     pub(crate) fn rig(&self) -> Result<Rig, Stop> {
         let (place, text) = match (&self.demo, &self.job) {
             (Some(name), _) => (name.clone(), demo(name)?.json.to_string()),
-            (None, Some(path)) => (path.display().to_string(), read(path)?),
+            (None, Some(path)) => (path.display().to_string(), read(path, MOST_BYTES, "a job")?),
             (None, None) => return Err(Stop::bad("a job file or --demo is needed")),
         };
         let job = Job::from_json(&text).map_err(|e| Stop::BadInput(format!("{place}: {e}")))?;
@@ -58,8 +58,8 @@ pub(crate) fn point_index(rig: &Rig, name: Option<&str>) -> Result<usize, Stop> 
     })
 }
 
-/// Reads at most one byte more than a job may have, so that a huge file is refused without being loaded.
-fn read(path: &Path) -> Result<String, Stop> {
+/// Reads at most one byte more than `what` may have, so that a huge file is refused without being loaded.
+pub(crate) fn read(path: &Path, most_bytes: usize, what: &str) -> Result<String, Stop> {
     let fail = |e: std::io::Error| Stop::BadInput(format!("{}: {e}", path.display()));
     let source: Box<dyn Read> = if path == Path::new("-") {
         Box::new(std::io::stdin())
@@ -67,10 +67,10 @@ fn read(path: &Path) -> Result<String, Stop> {
         Box::new(std::fs::File::open(path).map_err(fail)?)
     };
     let mut bytes = Vec::new();
-    source.take(MOST_BYTES as u64 + 1).read_to_end(&mut bytes).map_err(fail)?;
-    if bytes.len() > MOST_BYTES {
+    source.take(most_bytes as u64 + 1).read_to_end(&mut bytes).map_err(fail)?;
+    if bytes.len() > most_bytes {
         return Err(Stop::BadInput(format!(
-            "{}: larger than {MOST_BYTES} bytes, the most a job has",
+            "{}: larger than {most_bytes} bytes, the most {what} has",
             path.display()
         )));
     }

@@ -4,8 +4,10 @@
 
 mod airfoils;
 mod analyse;
+mod import;
 mod input;
 mod map;
+mod polar;
 mod sections;
 mod sweep;
 mod table;
@@ -30,6 +32,8 @@ const EXAMPLES: &str = "Examples:
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
   spokeshave schema                                the JSON Schema of the job file
   spokeshave sections                              the section families and where their tables come from
+  spokeshave polar OUTLINE.dat --re 1e5,3e5        lift and drag of an outline of your own
+  spokeshave import TABLE.csv --name my-section    a measured table, for a job file
 
 Exit codes: 0 answered, 1 no answer, 2 bad input.";
 
@@ -43,6 +47,10 @@ enum Command {
     Map(map::Args),
     /// List the section families, or the tables of one
     Sections(sections::Args),
+    /// Lift and drag of an outline over the angle of attack, computed
+    Polar(polar::Args),
+    /// Read a measured table and print it as a section for a job file
+    Import(import::Args),
     /// Compute the tables of the section families anew
     Airfoils(airfoils::Args),
     /// Print an invented job file to start from
@@ -57,6 +65,8 @@ fn main() -> ExitCode {
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),
+        Command::Polar(args) => polar::run(&args),
+        Command::Import(args) => import::run(&args),
         Command::Airfoils(args) => airfoils::run(&args),
         Command::Demo(args) => input::run_demo(&args),
         Command::Schema => input::run_schema(),

@@ -5,17 +5,17 @@ use super::error::OutlineError;
 use super::measure::sides;
 
 /// Largest thickness of the trailing edge, chords.
-const MOST: f64 = 0.05;
+pub const MAX_EDGE: f64 = 0.05;
 
 /// See [`Outline::with_edge_thickness`].
 pub(crate) fn with_edge_thickness(outline: &Outline, thickness: f64) -> Result<Outline, OutlineError> {
     let least = outline.measures().edge_thickness;
-    if !(least..=MOST).contains(&thickness) {
+    if !(least..=MAX_EDGE).contains(&thickness) {
         return Err(OutlineError::Figure {
             what: "trailing edge thickness",
             found: thickness,
             least,
-            most: MOST,
+            most: MAX_EDGE,
         });
     }
     let added = thickness - least;

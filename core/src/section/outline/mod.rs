@@ -19,6 +19,7 @@ mod scale;
 mod spline;
 
 pub use check::{MAX_POINTS, MIN_POINTS};
+pub use edge::MAX_EDGE;
 pub use error::{OutlineError, Place};
 pub use face::Face;
 pub use families::{arc_back, clark_y, naca_16_series, naca_four_digit, raf_6};

@@ -140,3 +140,29 @@ fn a_thick_edge_keeps_the_face() {
         assert!(section.with_edge_thickness(0.2).is_err());
     }
 }
+
+#[test]
+fn a_blunt_edge_keeps_the_face_the_nose_and_the_greatest_thickness() {
+    for section in [clark_y(), arc_back(0.12, 0.05), naca_four_digit(4, 4, 0.12)] {
+        let drawn = section.expect("drawn");
+        let blunt = drawn.with_edge_thickness(0.012).expect("room for it");
+        assert!((blunt.measures().edge_thickness - 0.012).abs() < 1e-4, "{:?}", blunt.measures());
+        assert!((blunt.thickness_ratio() - drawn.thickness_ratio()).abs() < 3e-4);
+        assert!((blunt.measures().nose_radius / drawn.measures().nose_radius - 1.0).abs() < 0.05);
+        assert_eq!(blunt.face().is_some(), drawn.face().is_some());
+        // The middle of the edge rises by half of what was added to the back: the chord line drops at the nose by as much.
+        if let (Some(a), Some(b)) = (drawn.face_angle_rad(), blunt.face_angle_rad()) {
+            let rise = 0.5 * (0.012 - drawn.measures().edge_thickness);
+            assert!((a - b - rise).abs() < 1e-4, "{a} {b} {rise}");
+            assert!((blunt.rotation_rad() - drawn.rotation_rad() - (b - a)).abs() < 1e-6);
+        }
+    }
+}
+
+#[test]
+fn an_edge_thinner_than_drawn_or_absurd_is_refused() {
+    let drawn = raf_6().expect("drawn");
+    for edge in [0.001, 0.2, -0.01, f64::NAN] {
+        assert!(matches!(drawn.with_edge_thickness(edge), Err(OutlineError::Figure { .. })), "{edge}");
+    }
+}

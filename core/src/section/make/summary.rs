@@ -1,0 +1,53 @@
+//! The few figures that tell polars apart.
+
+use serde::{Deserialize, Serialize};
+
+use crate::section::family::{About, Family};
+use crate::section::local::{Local, Situation};
+use crate::section::polar::{Polar, TableError};
+use crate::section::{best, working_band};
+
+/// Best lift-to-drag and the ends of one polar.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize, Deserialize)]
+pub struct Summary {
+    /// Angle of best lift-to-drag to the chord line, degrees; none when the section nowhere lifts.
+    pub best_angle_deg: Option<f64>,
+    /// Greatest lift-to-drag.
+    pub best_lift_to_drag: Option<f64>,
+    /// Span of angles that keeps 95 % of it, degrees.
+    pub working_band_deg: Option<(f64, f64)>,
+    /// Angle of zero lift, degrees.
+    pub zero_lift_deg: f64,
+    /// Greatest lift coefficient in the table.
+    pub cl_max: f64,
+    /// Least drag coefficient in the table.
+    pub cd_min: f64,
+}
+
+impl Summary {
+    /// The figures of a polar, found as a blade finds them: by the same cubics and the same search.
+    ///
+    /// # Errors
+    /// What is wrong with the polar.
+    pub fn of(polar: &Polar) -> Result<Self, TableError> {
+        let family = Family::new(About::default(), std::slice::from_ref(polar))?;
+        let situation = Situation {
+            thickness_ratio: polar.thickness_ratio.unwrap_or(0.12),
+            reynolds: polar.reynolds.unwrap_or(1e6),
+            mach: 0.0,
+            stall_delay: 0.0,
+        };
+        let local = Local::new(&family, situation);
+        let found = best(|a| local.at(a), local.landmarks().stall);
+        let band = found.map(|b| working_band(|a| local.at(a), b));
+        let figures = polar.points.iter();
+        Ok(Self {
+            best_angle_deg: found.map(|b| b.alpha_rad.to_degrees()),
+            best_lift_to_drag: found.map(|b| b.lift_to_drag),
+            working_band_deg: band.map(|(a, b)| (a.to_degrees(), b.to_degrees())),
+            zero_lift_deg: local.landmarks().zero_lift.to_degrees(),
+            cl_max: figures.clone().map(|p| p.cl).fold(f64::NEG_INFINITY, f64::max),
+            cd_min: figures.map(|p| p.cd).fold(f64::INFINITY, f64::min),
+        })
+    }
+}
