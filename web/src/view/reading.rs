@@ -184,7 +184,7 @@ fn map_note(props: &MapFigureProps) -> String {
     };
     let air =
         state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
-    format!("{along}{air}; each mark stands where the blade makes that advance per turn")
+    format!("{along}{air}; each mark stands at its advance per turn")
 }
 
 /// The station selected, in detail.

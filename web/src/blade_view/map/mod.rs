@@ -88,7 +88,8 @@ pub fn DepartureChart(props: &DepartureChartProps) -> Html {
     };
     let on_radius = nearest_station(&props.stations, &props.on_station);
     let height = props.axis.map_height_px();
-    let note = html! { <>{ &props.note }<DepartureKey /></> };
+    let words = &props.note;
+    let note = html! { <><span class="map-note" title={words.clone()}>{ words }</span><DepartureKey /></> };
     html! {
         <Figure title="Departure over the whole speed range" {note} {table} class="map-figure">
             <div class="map" ref={node}>
