@@ -10,6 +10,7 @@ use crate::number::fixed;
 use crate::state::{Action, Notice};
 
 /// Offers a text as a file. Returns whether the browser took it.
+#[must_use]
 pub fn offer(name: &str, kind: &str, text: &str) -> bool {
     try_offer(name, kind, text).is_some()
 }

@@ -200,7 +200,7 @@ impl Choice {
             Self::HubLoss(on) => method.hub_loss = *on,
             Self::AddStation(after) => return more_stations(job, *after),
             Self::RemoveStation(i) => {
-                remove(&mut next.propeller.stations, *i, 2, "A blade needs two stations.")?
+                remove(&mut next.propeller.stations, *i, 2, "A blade needs two stations.")?;
             }
             Self::AddPoint(like) => add_point(&mut next, *like),
             Self::RemovePoint(i) => remove(&mut next.flight_points, *i, 1, "A job needs one flight point.")?,
@@ -216,7 +216,7 @@ fn reference(job: &Job, to: AngleReference) -> Result<Job, String> {
 fn more_stations(job: &Job, after: usize) -> Result<Job, String> {
     let share = |i: usize| job.propeller.stations.get(i).map(|s| s.radius_fraction);
     let inner = share(after).ok_or_else(|| "There is no such station.".to_string())?;
-    let middle = (inner + share(after + 1).unwrap_or(1.0)) / 2.0;
+    let middle = f64::midpoint(inner, share(after + 1).unwrap_or(1.0));
     with_station(job, middle).ok_or_else(|| "There is no room for a station there.".into())
 }
 
@@ -240,6 +240,8 @@ fn remove<T>(from: &mut Vec<T>, i: usize, fewest: usize, why: &str) -> Result<()
 fn add_point(job: &mut Job, like: usize) {
     let Some(model) = job.flight_points.get(like).or(job.flight_points.first()) else { return };
     let taken = |name: &str| job.flight_points.iter().any(|p| p.name == name);
-    let name = (1..).map(|n| format!("Point {n}")).find(|name| !taken(name)).unwrap_or_default();
+    // One more name than there are points: one of them is free.
+    let mut names = (1..=job.flight_points.len() + 1).map(|n| format!("Point {n}"));
+    let name = names.find(|name| !taken(name)).unwrap_or_default();
     job.flight_points.push(FlightPoint { name, ..model.clone() });
 }

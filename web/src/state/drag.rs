@@ -7,7 +7,7 @@ use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::job::Job;
 use spokeshave::rig::Rig;
 
-use super::field::{Field, Measure};
+use super::{Field, Measure};
 
 /// A drag that has begun.
 #[derive(Clone, Debug)]

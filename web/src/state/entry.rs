@@ -5,7 +5,7 @@ use std::collections::BTreeMap;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{Job, Problem};
 
-use super::field::{Field, Measure, PointFigure};
+use super::{Field, Measure, PointFigure};
 use crate::number;
 use crate::units::{Quantity, Units};
 

@@ -1,8 +1,10 @@
 //! The figures of a job that are typed into boxes: where each stands, what it measures, how it is read and written.
 
-use spokeshave::drawn::{DrawnStation, kept_angle_deg};
-use spokeshave::job::{AngleReference, Job, PitchControl, Setting, Station};
+use spokeshave::drawn::DrawnStation;
+use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
 
+use super::measure::{Measure, write_station};
+use super::point_figure::PointFigure;
 use crate::units::Quantity;
 
 /// One figure of a job.
@@ -34,66 +36,6 @@ pub enum Field {
     Amplification,
 }
 
-/// What is measured at a station.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
-pub enum Measure {
-    /// Radius.
-    Radius,
-    /// Chord.
-    Chord,
-    /// Greatest thickness.
-    Thickness,
-    /// Blade angle to the chord line.
-    Angle,
-    /// Blade angle on the flat face.
-    FaceAngle,
-    /// Geometric pitch.
-    Pitch,
-}
-
-/// A figure of a flight point.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
-pub enum PointFigure {
-    /// Its name; a text.
-    Name,
-    /// Pressure altitude.
-    Height,
-    /// Temperature offset.
-    Temperature,
-    /// Airspeed.
-    Airspeed,
-    /// The figure of its setting.
-    Setting,
-}
-
-impl Measure {
-    /// What it is called.
-    #[must_use]
-    pub fn name(self) -> &'static str {
-        match self {
-            Self::Radius => "radius",
-            Self::Chord => "chord",
-            Self::Thickness => "thickness",
-            Self::Angle => "blade angle",
-            Self::FaceAngle => "angle on the face",
-            Self::Pitch => "pitch",
-        }
-    }
-
-    /// The figure of a station as drawn.
-    #[must_use]
-    pub fn of(self, drawn: &DrawnStation) -> Option<f64> {
-        match self {
-            Self::Radius => Some(drawn.radius_m),
-            Self::Chord => Some(drawn.chord_m),
-            Self::Thickness => Some(drawn.thickness_m),
-            Self::Angle => Some(drawn.angle_deg),
-            Self::FaceAngle => drawn.face_angle_deg,
-            Self::Pitch => Some(drawn.pitch_m),
-        }
-    }
-}
-
 impl Field {
     /// What it measures.
     #[must_use]
@@ -101,11 +43,12 @@ impl Field {
         match self {
             Self::Blades | Self::Elements => Quantity::Count,
             Self::Title | Self::Amplification | Self::Point(_, PointFigure::Name) => Quantity::Number,
-            Self::Diameter | Self::Hub => Quantity::Length,
-            Self::Turn | Self::FineStop | Self::CoarseStop => Quantity::Angle,
             Self::GovernedRpm => Quantity::Rpm,
-            Self::Station(_, Measure::Angle | Measure::FaceAngle) => Quantity::Angle,
-            Self::Station(..) => Quantity::Length,
+            Self::Turn
+            | Self::FineStop
+            | Self::CoarseStop
+            | Self::Station(_, Measure::Angle | Measure::FaceAngle) => Quantity::Angle,
+            Self::Diameter | Self::Hub | Self::Station(..) => Quantity::Length,
             Self::Point(_, PointFigure::Height) => Quantity::Height,
             Self::Point(_, PointFigure::Temperature) => Quantity::Temperature,
             Self::Point(_, PointFigure::Airspeed) => Quantity::Speed,
@@ -232,106 +175,7 @@ impl Field {
     }
 }
 
-impl Measure {
-    fn key(self) -> &'static str {
-        match self {
-            Self::Radius => "radius_fraction",
-            Self::Chord => "chord_m",
-            Self::Thickness => "thickness_ratio",
-            Self::Angle | Self::FaceAngle => "angle_deg",
-            Self::Pitch => "pitch_m",
-        }
-    }
-}
-
-impl PointFigure {
-    /// What it is called.
-    #[must_use]
-    pub fn name(self) -> &'static str {
-        match self {
-            Self::Name => "name",
-            Self::Height => "height",
-            Self::Temperature => "temperature offset",
-            Self::Airspeed => "airspeed",
-            Self::Setting => "setting",
-        }
-    }
-
-    fn key(self, job: &Job, i: usize) -> &'static str {
-        match self {
-            Self::Name => "name",
-            Self::Height => "altitude_m",
-            Self::Temperature => "isa_offset_k",
-            Self::Airspeed => "airspeed_m_s",
-            Self::Setting => match job.flight_points.get(i).map(|p| &p.setting) {
-                Some(Setting::Power { .. }) => "setting.power_w",
-                Some(Setting::Throttle { .. }) => "setting.fraction",
-                _ => "setting.rpm",
-            },
-        }
-    }
-
-    fn value(self, job: &Job, i: usize) -> Option<f64> {
-        let point = job.flight_points.get(i)?;
-        match self {
-            Self::Name => None,
-            Self::Height => Some(point.altitude_m),
-            Self::Temperature => Some(point.isa_offset_k),
-            Self::Airspeed => point.airspeed_m_s,
-            Self::Setting => match point.setting {
-                Setting::Rpm { rpm } => Some(rpm),
-                Setting::Power { power_w } => Some(power_w),
-                Setting::Throttle { fraction } => Some(fraction),
-                Setting::FullThrottle {} | Setting::Level {} => None,
-            },
-        }
-    }
-
-    fn write(self, job: &mut Job, i: usize, value: f64) -> bool {
-        let Some(point) = job.flight_points.get_mut(i) else { return false };
-        match (self, &mut point.setting) {
-            (Self::Height, _) => point.altitude_m = value,
-            (Self::Temperature, _) => point.isa_offset_k = value,
-            (Self::Airspeed, _) => point.airspeed_m_s = Some(value),
-            (Self::Setting, Setting::Rpm { rpm }) => *rpm = value,
-            (Self::Setting, Setting::Power { power_w }) => *power_w = value,
-            (Self::Setting, Setting::Throttle { fraction }) => *fraction = value,
-            (Self::Name, _) | (Self::Setting, Setting::FullThrottle {} | Setting::Level {}) => return false,
-        }
-        true
-    }
-}
-
 /// A whole number; 0, which nothing allows, for what is none.
 fn whole(value: f64) -> u32 {
     if value.fract() == 0.0 && (0.0..=1e6).contains(&value) { value as u32 } else { 0 }
-}
-
-fn write_station(job: &mut Job, i: usize, measure: Measure, value: f64) -> bool {
-    let tip_m = job.propeller.diameter_m / 2.0;
-    let kept_deg = match measure {
-        Measure::Angle => kept_angle_deg(job, i, AngleReference::ChordLine, value),
-        Measure::FaceAngle => kept_angle_deg(job, i, AngleReference::FlatFace, value),
-        _ => None,
-    };
-    let Some(station) = job.propeller.stations.get_mut(i) else { return false };
-    match measure {
-        Measure::Radius => station.radius_fraction = value / tip_m,
-        Measure::Chord => write_chord(station, value),
-        Measure::Thickness => station.thickness_ratio = value / station.chord_m,
-        Measure::Pitch => (station.angle_deg, station.pitch_m) = (None, Some(value)),
-        Measure::Angle | Measure::FaceAngle => {
-            if kept_deg.is_none() {
-                return false;
-            }
-            (station.angle_deg, station.pitch_m) = (kept_deg, None);
-        }
-    }
-    true
-}
-
-/// The thickness in millimetres stays: one entry changes one measure of the wood.
-fn write_chord(station: &mut Station, chord_m: f64) {
-    station.thickness_ratio *= station.chord_m / chord_m;
-    station.chord_m = chord_m;
 }

@@ -1,23 +1,33 @@
 //! The page's state and the one reducer that changes it. Nothing here touches the browser: texts and events come in as
 //! actions, and what has to be stored or computed is read off the state that comes out.
 
+pub mod action;
 pub mod choice;
 pub mod drag;
 pub mod entry;
 pub mod field;
 pub mod history;
+pub mod measure;
+pub mod notice;
+pub mod point_figure;
 #[cfg(test)]
 mod tests;
 
 use std::rc::Rc;
 
-use spokeshave::job::{DEMOS, Job, JobError};
+use spokeshave::job::{DEMOS, Job};
 
+pub use action::Action;
 pub use choice::{Choice, ControlKind, Running, SettingKind};
 pub use drag::{Drag, drawn, follows};
 pub use entry::{Draft, Drafts, shown_text};
-pub use field::{Field, Measure, PointFigure};
+pub use field::Field;
 pub use history::History;
+pub use measure::Measure;
+pub use notice::Notice;
+pub use point_figure::PointFigure;
+
+use notice::refused;
 
 use crate::units::Units;
 
@@ -34,15 +44,6 @@ pub enum Theme {
     Light,
     /// Dark.
     Dark,
-}
-
-/// Something the page has to say.
-#[derive(Clone, Debug, PartialEq)]
-pub struct Notice {
-    /// What happened.
-    pub title: String,
-    /// Where, what, what is allowed; one line each.
-    pub lines: Vec<String>,
 }
 
 /// The state of the page.
@@ -68,59 +69,8 @@ pub struct State {
     pub theme: Theme,
     /// Something to say.
     pub notice: Option<Notice>,
-}
-
-/// What can happen.
-#[derive(Clone, Debug)]
-pub enum Action {
-    /// A text is being typed into a box.
-    Type(Field, String),
-    /// The text in a box is meant.
-    Commit(Field),
-    /// The text in a box is given up.
-    GiveUp(Field),
-    /// Something was picked, added or removed.
-    Choose(Choice, Running),
-    /// A flight point was selected.
-    SelectPoint(usize),
-    /// A station was selected.
-    SelectStation(usize),
-    /// One station outward.
-    Outward,
-    /// One station inward.
-    Inward,
-    /// A ring was taken.
-    Take(usize, Measure),
-    /// The ring taken is here, SI.
-    DragTo(f64),
-    /// The ring was let go.
-    LetGo,
-    /// The ring goes back.
-    PutBack,
-    /// A ring was moved by a key to here, SI.
-    Nudge(usize, Measure, f64),
-    /// The run of key presses is over.
-    EndRun,
-    /// So many stations on either side follow.
-    Follow(usize),
-    /// The latest step is taken back.
-    Undo,
-    /// The step taken back is taken again.
-    Redo,
-    /// A job file was read: its name and text.
-    Open(String, String),
-    /// A job that comes with the program.
-    Demo(usize),
-    /// A plain job to start from.
-    Blank,
-    /// Units were picked.
-    Units(Units),
-    /// Colours were picked.
-    Theme(Theme),
-    /// Something has to be said.
-    Say(Notice),
-    /// What was said has been read.
-    Dismiss,
+    /// The job as it was last opened from or saved as a file.
+    pub filed: Option<Rc<Job>>,
 }
 
 impl State {
@@ -140,6 +90,7 @@ impl State {
             units_picked: false,
             theme: Theme::default(),
             notice: None,
+            filed: None,
         }
     }
 
@@ -160,6 +111,12 @@ impl State {
     #[must_use]
     pub fn job(&self) -> &Rc<Job> {
         self.history.job()
+    }
+
+    /// Whether the job is as it was last opened from or saved as a file.
+    #[must_use]
+    pub fn is_filed(&self) -> bool {
+        self.filed.as_ref().is_some_and(|filed| filed == self.job())
     }
 
     /// The state after an action.
@@ -184,7 +141,7 @@ impl State {
             | Action::LetGo
             | Action::PutBack
             | Action::Nudge(..)
-            | Action::EndRun => self.drag(action),
+            | Action::EndRun => self.drag(&action),
             Action::Follow(span) => self.follow = span.min(5),
             Action::Undo | Action::Redo => self.turn_back(matches!(action, Action::Undo)),
             Action::Open(name, text) => self.open(&name, &text),
@@ -194,6 +151,7 @@ impl State {
             Action::Theme(theme) => self.theme = theme,
             Action::Say(notice) => self.notice = Some(notice),
             Action::Dismiss => self.notice = None,
+            Action::Saved => self.filed = Some(self.job().clone()),
         }
     }
 
@@ -257,8 +215,8 @@ impl State {
         self.drafts.clear();
     }
 
-    fn drag(&mut self, action: Action) {
-        match action {
+    fn drag(&mut self, action: &Action) {
+        match *action {
             Action::Take(station, measure) => {
                 self.station = station;
                 self.drag = Some(Drag { station, measure, start: self.job().clone() });
@@ -312,7 +270,10 @@ impl State {
 
     fn open(&mut self, name: &str, text: &str) {
         match Job::from_json(text) {
-            Ok(job) => self.show_new(job, format!("open {name}")),
+            Ok(job) => {
+                self.show_new(job, format!("open {name}"));
+                self.filed = Some(self.job().clone());
+            }
             Err(error) => {
                 self.notice =
                     Some(refused(&format!("{name} was not opened. The job on the page stays."), &error));
@@ -358,13 +319,4 @@ fn places(job: &Job) -> (usize, usize) {
     let near = stations.min_by(|a, b| off(a.1.radius_fraction).total_cmp(&off(b.1.radius_fraction)));
     let cruise = job.flight_points.iter().position(|p| p.name.to_lowercase().contains("cruise"));
     (cruise.unwrap_or(0), near.map_or(0, |(i, _)| i))
-}
-
-/// A job that was refused, by path.
-fn refused(title: &str, error: &JobError) -> Notice {
-    let lines = match error {
-        JobError::Values(problems) => problems.iter().take(8).map(ToString::to_string).collect(),
-        other => vec![other.to_string()],
-    };
-    Notice { title: title.into(), lines }
 }

@@ -218,6 +218,15 @@ fn a_file_that_is_no_job_changes_nothing_and_says_where() {
 }
 
 #[test]
+fn it_knows_whether_the_job_is_saved_as_a_file() {
+    let saved = start().after(Action::Saved);
+    assert!(!start().is_filed() && saved.is_filed());
+    let changed = typed(&saved, ANGLE_8, "19");
+    assert!(!changed.is_filed() && changed.after(Action::Undo).is_filed());
+    assert!(changed.after(Action::Open("x.json".into(), DEMOS[1].json.into())).is_filed());
+}
+
+#[test]
 fn opening_a_job_can_be_undone() {
     let state = typed(&start(), ANGLE_8, "19").after(Action::Demo(1));
     assert_eq!(state.job().title, Job::from_json(DEMOS[1].json).unwrap().title);

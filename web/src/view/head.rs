@@ -59,10 +59,11 @@ fn owned(name: Option<&str>) -> Option<AttrValue> {
 #[component]
 fn Title(props: &HeadProps) -> Html {
     let shown = Shown::of(&props.state, &[], Field::Title);
-    let saved = if props.kept {
-        "kept in this browser"
-    } else {
-        "not kept: this browser refuses storage. Save the job."
+    let saved = match (props.kept, props.state.is_filed()) {
+        (true, true) => "saved as a file, kept in this browser",
+        (true, false) => "kept in this browser, not saved as a file",
+        (false, true) => "saved as a file; this browser keeps nothing",
+        (false, false) => "not kept: this browser refuses storage. Save the job.",
     };
     html! {
         <div class="title">
@@ -192,7 +193,9 @@ fn save_page(act: &Act, state: &Seen) -> Callback<MouseEvent> {
 }
 
 fn told(act: &Act, taken: bool) {
-    if !taken {
+    if taken {
+        act.send(Action::Saved);
+    } else {
         let lines = vec!["The browser did not take the file. The job is still on this page.".to_string()];
         act.send(Action::Say(Notice { title: "Nothing was saved.".into(), lines }));
     }

@@ -107,7 +107,7 @@ fn PointRow(props: &PointRowProps) -> Html {
             <tr class={classes!((i == state.point).then_some("selected"))}>
                 <th scope="row"><Entry shown={boxes[0].clone()} is_text=true class="name" /></th>
                 { for boxes[1..3].iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
-                <td><Entry shown={boxes[3].clone()} hint={top_speed(state.units, &props.result)} /></td>
+                <td><Entry shown={boxes[3].clone()} hint={top_speed(state.units, props.result.as_ref().as_ref())} /></td>
                 <td><SettingPick index={i} point={point.clone()} result={props.result.clone()} /></td>
                 <td class="setting">{ setting_box(point, &boxes[4]) }</td>
                 <PointAnswer result={props.result.clone()} units={state.units} />
@@ -121,11 +121,8 @@ fn PointRow(props: &PointRowProps) -> Html {
 }
 
 /// The airspeed that came out, for a box left empty.
-fn top_speed(units: Units, result: &Option<PointResult>) -> String {
-    result
-        .as_ref()
-        .and_then(|r| r.airspeed_m_s)
-        .map_or_else(String::new, |v| figure(units, Quantity::Speed, Some(v)))
+fn top_speed(units: Units, result: Option<&PointResult>) -> String {
+    result.and_then(|r| r.airspeed_m_s).map_or_else(String::new, |v| figure(units, Quantity::Speed, Some(v)))
 }
 
 fn setting_box(point: &FlightPoint, shown: &Shown) -> Html {

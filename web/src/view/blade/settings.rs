@@ -57,13 +57,10 @@ fn section(act: &Act, state: &Seen) -> Html {
     let names = section_names(state.job());
     let one = one_section(state.job());
     let mut options: Vec<AttrValue> = names.iter().cloned().map(AttrValue::from).collect();
-    let picked = match one {
-        Some(one) => names.iter().position(|n| n == one),
-        None => {
-            options.push("by station".into());
-            Some(names.len())
-        }
-    };
+    if one.is_none() {
+        options.push("by station".into());
+    }
+    let picked = one.map_or(Some(names.len()), |one| names.iter().position(|n| n == one));
     let onpick = act.on(move |i: usize| match names.get(i) {
         Some(name) => Action::Choose(Choice::SectionOfAll(name.clone()), Running::default()),
         None => Action::Dismiss,

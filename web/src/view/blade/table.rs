@@ -55,7 +55,7 @@ pub fn StationTable(props: &StationTableProps) -> Html {
     let rows = (0..props.drawn.len()).rev().map(|i| {
         html! {
             <StationRow key={i} index={i} state={state.clone()} drawn={props.drawn.clone()} columns={columns.clone()}
-                departures={departures(i)} now={departure(&props.point, i)} />
+                departures={departures(i)} now={departure(props.point.as_ref().as_ref(), i)} />
         }
     });
     let by_station = {
@@ -86,15 +86,15 @@ pub fn StationTable(props: &StationTableProps) -> Html {
 }
 
 /// The one selected is worked out first, so that its column never lags.
-fn result(props: &StationTableProps, point: usize) -> &Option<PointResult> {
+fn result(props: &StationTableProps, point: usize) -> Option<&PointResult> {
     if point == props.state.point {
-        return &props.point;
+        return props.point.as_ref().as_ref();
     }
-    props.points.get(point).map_or(&None, |p| p)
+    props.points.get(point)?.as_ref().as_ref()
 }
 
-fn departure(result: &Option<PointResult>, station: usize) -> Option<f64> {
-    result.as_ref()?.stations.get(station)?.departure_deg
+fn departure(result: Option<&PointResult>, station: usize) -> Option<f64> {
+    result?.stations.get(station)?.departure_deg
 }
 
 /// The first few, and the one selected.

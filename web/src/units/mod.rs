@@ -1,10 +1,13 @@
-//! The units the page shows and takes. Inside everything is SI (angles in degrees, as in the job file); this is the only
-//! place that converts, and the factors are those of the `uom` crate.
+//! The units the page shows and takes. Inside everything is SI (angles in degrees, as in the job file).
+
+mod choice;
+mod worth;
+
+pub use choice::{ForceUnit, HeightUnit, LengthUnit, PowerUnit, SpeedUnit, TorqueUnit};
+use worth::{force_n, height_m, length_m, power_w, speed_m_s, torque_n_m};
 
 use crate::chart::unit::Unit;
 use serde::{Deserialize, Serialize};
-use uom::si::f64::{Force, Length, Power, Torque, Velocity};
-use uom::si::{force, length, power, torque, velocity};
 
 /// What a figure measures.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
@@ -37,89 +40,6 @@ pub enum Quantity {
     Number,
     /// A whole number.
     Count,
-}
-
-/// Declares a choice of units: name, symbol, and the unit of the library.
-macro_rules! choice {
-    ($(#[$doc:meta])* $name:ident { $($(#[$item_doc:meta])* $item:ident = $symbol:literal),+ $(,)? }) => {
-        $(#[$doc])*
-        #[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize, Deserialize)]
-        pub enum $name { $($(#[$item_doc])* $item),+ }
-
-        impl $name {
-            /// Every choice, in the order shown.
-            pub const ALL: &'static [Self] = &[$(Self::$item),+];
-
-            /// The unit as written behind a figure.
-            #[must_use]
-            pub fn symbol(self) -> &'static str {
-                match self { $(Self::$item => $symbol),+ }
-            }
-        }
-    };
-}
-
-choice! {
-    /// Unit of lengths on the propeller.
-    LengthUnit {
-        /// Millimetre.
-        Millimetre = "mm",
-        /// Inch.
-        Inch = "in",
-    }
-}
-choice! {
-    /// Unit of airspeed.
-    SpeedUnit {
-        /// Kilometre per hour.
-        KilometrePerHour = "km/h",
-        /// Knot.
-        Knot = "kt",
-        /// Statute mile per hour.
-        MilePerHour = "mph",
-        /// Metre per second.
-        MetrePerSecond = "m/s",
-    }
-}
-choice! {
-    /// Unit of force.
-    ForceUnit {
-        /// Newton.
-        Newton = "N",
-        /// Pound-force.
-        PoundForce = "lbf",
-        /// Kilogram-force.
-        KilogramForce = "kgf",
-    }
-}
-choice! {
-    /// Unit of power.
-    PowerUnit {
-        /// Kilowatt.
-        Kilowatt = "kW",
-        /// Watt.
-        Watt = "W",
-        /// Mechanical horsepower, 550 foot-pounds a second.
-        Horsepower = "hp",
-    }
-}
-choice! {
-    /// Unit of height.
-    HeightUnit {
-        /// Metre.
-        Metre = "m",
-        /// Foot.
-        Foot = "ft",
-    }
-}
-choice! {
-    /// Unit of torque.
-    TorqueUnit {
-        /// Newton metre.
-        NewtonMetre = "N m",
-        /// Pound-force foot.
-        PoundFoot = "lbf ft",
-    }
 }
 
 /// The units picked.
@@ -243,72 +163,21 @@ impl Units {
             Quantity::Height => height_m(self.height),
             Quantity::Speed => speed_m_s(self.speed),
             Quantity::Climb if self.height == HeightUnit::Foot => height_m(HeightUnit::Foot) / 60.0,
-            Quantity::Climb => 1.0,
-            Quantity::Force => force_n(self.force),
             Quantity::Grading if self.force == ForceUnit::PoundForce => {
                 force_n(self.force) / height_m(HeightUnit::Foot)
             }
-            Quantity::Grading => force_n(self.force),
+            Quantity::Force | Quantity::Grading => force_n(self.force),
             Quantity::Torque => torque_n_m(self.torque),
             Quantity::Power => power_w(self.power),
             Quantity::Share => 0.01,
-            Quantity::Angle | Quantity::Temperature | Quantity::Rpm | Quantity::Number | Quantity::Count => {
-                1.0
-            }
+            Quantity::Climb
+            | Quantity::Angle
+            | Quantity::Temperature
+            | Quantity::Rpm
+            | Quantity::Number
+            | Quantity::Count => 1.0,
         }
     }
-}
-
-fn length_m(unit: LengthUnit) -> f64 {
-    match unit {
-        LengthUnit::Millimetre => Length::new::<length::millimeter>(1.0),
-        LengthUnit::Inch => Length::new::<length::inch>(1.0),
-    }
-    .get::<length::meter>()
-}
-
-fn height_m(unit: HeightUnit) -> f64 {
-    match unit {
-        HeightUnit::Metre => Length::new::<length::meter>(1.0),
-        HeightUnit::Foot => Length::new::<length::foot>(1.0),
-    }
-    .get::<length::meter>()
-}
-
-fn speed_m_s(unit: SpeedUnit) -> f64 {
-    match unit {
-        SpeedUnit::KilometrePerHour => Velocity::new::<velocity::kilometer_per_hour>(1.0),
-        SpeedUnit::Knot => Velocity::new::<velocity::knot>(1.0),
-        SpeedUnit::MilePerHour => Velocity::new::<velocity::mile_per_hour>(1.0),
-        SpeedUnit::MetrePerSecond => Velocity::new::<velocity::meter_per_second>(1.0),
-    }
-    .get::<velocity::meter_per_second>()
-}
-
-fn force_n(unit: ForceUnit) -> f64 {
-    match unit {
-        ForceUnit::Newton => Force::new::<force::newton>(1.0),
-        ForceUnit::PoundForce => Force::new::<force::pound_force>(1.0),
-        ForceUnit::KilogramForce => Force::new::<force::kilogram_force>(1.0),
-    }
-    .get::<force::newton>()
-}
-
-fn power_w(unit: PowerUnit) -> f64 {
-    match unit {
-        PowerUnit::Kilowatt => Power::new::<power::kilowatt>(1.0),
-        PowerUnit::Watt => Power::new::<power::watt>(1.0),
-        PowerUnit::Horsepower => Power::new::<power::horsepower>(1.0),
-    }
-    .get::<power::watt>()
-}
-
-fn torque_n_m(unit: TorqueUnit) -> f64 {
-    match unit {
-        TorqueUnit::NewtonMetre => Torque::new::<torque::newton_meter>(1.0),
-        TorqueUnit::PoundFoot => Torque::new::<torque::pound_force_foot>(1.0),
-    }
-    .get::<torque::newton_meter>()
 }
 
 /// The unit a suffix typed behind a figure stands for, in SI; `None` where it is no unit of this quantity.
