@@ -37,6 +37,7 @@ pub(super) fn drawing(layout: &Layout, props: &BladeRackProps) -> Html {
             { bands(layout, props) }
             <path class="outline" d={props.shape.outline(|r, o| layout.place(r, o))} />
             { centre_lines(layout) }
+            { chord_scale(layout) }
         </g>
     }
 }
@@ -82,6 +83,21 @@ fn hub(layout: &Layout, shape: &Planform) -> String {
     path.curve_to([[layout.blade_x + wide, low - bend], [r[0], top + bend]], r);
     path.close();
     path.into_string()
+}
+
+/// Says so where a wide blade is drawn narrower than to the scale of radius.
+fn chord_scale(layout: &Layout) -> Html {
+    let share = layout.chord_share();
+    if share > 0.995 {
+        return Html::default();
+    }
+    let y = layout.axis.hub_px;
+    html! {
+        <>
+            <text class="axis-figure" x="0" y={px(y + 18.0)}>{ "chord at" }</text>
+            <text class="axis-figure" x="0" y={px(y + 32.0)}>{ format!("{share:.2} scale") }</text>
+        </>
+    }
 }
 
 fn centre_lines(layout: &Layout) -> Html {
