@@ -68,6 +68,8 @@ fn span(axis: &Axis, data: impl Iterator<Item = f64>, round: bool) -> (f64, f64)
     }
     // From zero, unless the data keep far from it.
     let (low, high) = if low > 0.0 && low < 0.6 * high { (0.0, high) } else { (low, high) };
+    // What a root leaves below zero is not worth a step of the axis.
+    let low = if low < 0.0 && low > -1e-3 * high { 0.0 } else { low };
     let (low, high) = widened(axis.unit.of(low), axis.unit.of(high));
     (axis.unit.si(low), axis.unit.si(high))
 }
@@ -85,6 +87,7 @@ mod tests {
     fn spans_come_from_the_data_and_are_round_in_the_unit_shown() {
         let data = [0.02, f64::NAN, 0.117];
         assert_eq!(span(&axis(Unit::ratio(2)), data.into_iter(), true), (0.0, 0.12));
+        assert_eq!(span(&axis(Unit::ratio(2)), [-1e-7, 0.117].into_iter(), true), (0.0, 0.12));
         let (low, high) = span(&axis(Unit::INCH), [0.1, 0.7].into_iter(), true);
         assert!((low - 0.0).abs() < 1e-12 && (high - 30.0 * 0.0254).abs() < 1e-12, "{low} {high}");
     }
