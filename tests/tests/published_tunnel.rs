@@ -21,50 +21,30 @@ fn misfit(turn_deg: f64, n_crit: f64) -> (f64, f64) {
     ((ct_sum / n).sqrt(), (cp_sum / n).sqrt())
 }
 
-/// The blade angle itself is uncertain by 1.36° (design against photograph), which moves CT by 8 % and CP by 7 %: that is the
-/// tolerance at either end, and 5.5 % midway. Tables of quiet air, n = 9, are nearer than those of disturbed air, n = 4.
+/// With the print's own angle, by photograph, the answer lies within 3 % of what the tunnel printed: its CT and CP are good to 1 to 3 %
+/// at this size (J. B. Brandt and M. S. Selig, AIAA 2011-1255, from memory). Tables of quiet air, n = 9, are nearer than those of
+/// disturbed air, n = 4: they are the default.
 #[test]
 fn validate_thrust_and_power_deters_2014() {
-    let midway = misfit(PRINT_TURN_DEG / 2.0, 9.0);
-    assert!(midway.0 < 0.055 && midway.1 < 0.055, "midway {midway:?}");
     let photographed = misfit(PRINT_TURN_DEG, 9.0);
-    assert!(photographed.0 < 0.085 && photographed.1 < 0.085, "as photographed {photographed:?}");
-    let design = misfit(0.0, 9.0);
-    assert!(design.0 < 0.085, "as designed {design:?}");
-    let disturbed = misfit(PRINT_TURN_DEG / 2.0, 4.0);
-    assert!(disturbed.0 > midway.0, "the default n is the nearer one: {disturbed:?} {midway:?}");
+    assert!(photographed.0 < 0.03 && photographed.1 < 0.03, "as photographed {photographed:?}");
+    let disturbed = misfit(PRINT_TURN_DEG, 4.0);
+    assert!(disturbed.0 > photographed.0 && disturbed.1 > photographed.1, "{disturbed:?} {photographed:?}");
 }
 
-/// From J 0.25 up the measured thrust lies between the answers for the two blade angles.
+/// At rest: CT within 2 %, CP within 3 % of the tunnel's, for the same reason.
 #[test]
-fn validate_the_measurement_lies_between_the_two_angles() {
-    let ct = |turn: f64| {
-        let points = Rig::new(&job(turn, 9.0)).unwrap().analysis().flight_points;
-        points.iter().map(|p| p.figures.ct.unwrap()).collect::<Vec<f64>>()
-    };
-    let (low, high) = (ct(0.0), ct(PRINT_TURN_DEG));
-    for (i, (j, measured, _)) in MEASURED.iter().enumerate().filter(|(_, m)| m.0 > 0.25) {
-        // 0.002 is the reading error of the balance at this size, common practice.
-        assert!(
-            (low[i] - 0.002..=high[i] + 0.002).contains(measured),
-            "J {j}: {} {measured} {}",
-            low[i],
-            high[i]
-        );
-    }
+fn validate_at_rest_deters_2014() {
+    let points = Rig::new(&job(PRINT_TURN_DEG, 9.0)).unwrap().analysis().flight_points;
+    let rest = &points[MEASURED.len()].figures;
+    assert!((rest.ct.unwrap() / AT_REST.0 - 1.0).abs() < 0.02, "{:?}", rest.ct);
+    assert!((rest.cp.unwrap() / AT_REST.1 - 1.0).abs() < 0.03, "{:?}", rest.cp);
 }
 
-/// Known misses: at rest and below J 0.25 the thrust comes out high whatever the angle, for momentum theory lets no wake
-/// contract and the sections near the hub (37 % thick, chord not published) are held at the edge of the tables; and the power at the
-/// design angle is low by 12 %. An unexpected pass fails here, so that the list stays true.
+/// Known miss: with the angle of the design, 1.36° finer than the print measured, thrust is low by 11 % and power by 16 %. Which angle
+/// the print really had is not known. An unexpected pass fails here, so that the list stays true.
 #[test]
-fn known_misses_are_still_misses() {
-    let rest = Rig::new(&job(0.0, 9.0)).unwrap().analysis().flight_points.pop().unwrap().figures.ct.unwrap();
-    assert!(
-        (1.05..1.12).contains(&(rest / AT_REST.0)),
-        "thrust at rest over the measured one: {}",
-        rest / AT_REST.0
-    );
+fn known_miss_at_the_design_angle() {
     let design = misfit(0.0, 9.0);
-    assert!((0.10..0.135).contains(&design.1), "power at the design angle: {design:?}");
+    assert!((0.09..0.13).contains(&design.0) && (0.14..0.18).contains(&design.1), "{design:?}");
 }
