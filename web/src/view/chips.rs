@@ -53,10 +53,14 @@ pub fn Chips(props: &ChipsProps) -> Html {
     html! { <div class="chips" role="radiogroup" aria-label="Flight point" {onkeydown}>{ for chips }</div> }
 }
 
-/// The airspeed given, else the one that came out.
+/// The airspeed given, else the one that came out, else that there is none.
 fn speed_words(units: Units, point: &FlightPoint, result: Option<&Rc<Option<PointResult>>>) -> String {
-    let came_out = result.and_then(|r| r.as_ref().as_ref()).and_then(|r| r.airspeed_m_s);
-    with_unit(units, Quantity::Speed, point.airspeed_m_s.or(came_out))
+    let result = result.and_then(|r| r.as_ref().as_ref());
+    match point.airspeed_m_s.or(result.and_then(|r| r.airspeed_m_s)) {
+        Some(v) => with_unit(units, Quantity::Speed, Some(v)),
+        None if result.is_some() => "no answer".into(),
+        None => String::new(),
+    }
 }
 
 fn focus_sibling(event: &KeyboardEvent, to: usize) {

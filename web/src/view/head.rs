@@ -68,7 +68,7 @@ fn Title(props: &HeadProps) -> Html {
     html! {
         <div class="title">
             <h1 class="unseen">{ format!("{} – Spokeshave", props.state.job().title) }</h1>
-            <Entry shown={shown.clone()} is_text=true class="title-entry" />
+            <Entry shown={shown.clone()} is_text=true class="title-entry" hint="Untitled" />
             <span class={classes!("saved", (!props.kept).then_some("saved-not"))} role="status">{ saved }</span>
             <Message {shown} />
         </div>

@@ -1,6 +1,6 @@
 //! The few figures that decide, for the flight point selected.
 
-use spokeshave::result::{PointResult, State as Answer, StationResult};
+use spokeshave::result::{Note, PointResult, State as Answer, StationResult};
 use yew::prelude::*;
 
 use crate::number::{NO_FIGURE, figure, fixed, fixed_or_none, signed, with_unit};
@@ -49,7 +49,29 @@ pub fn Verdict(props: &VerdictProps) -> Html {
         }
     });
     html! {
-        <section aria-label={format!("Verdict at {}", result.name)}><ul class="verdict">{ for cells }</ul></section>
+        <section aria-label={format!("Verdict at {}", result.name)}>
+            <ul class="verdict">{ for cells }</ul>
+            <Notes notes={result.notes.clone()} />
+        </section>
+    }
+}
+
+#[derive(Properties, PartialEq)]
+struct NotesProps {
+    notes: Vec<Note>,
+}
+
+/// What is worth knowing of the figures, with the way to where it holds.
+#[component]
+fn Notes(props: &NotesProps) -> Html {
+    if props.notes.is_empty() {
+        return html! {};
+    }
+    let words: Vec<&str> = props.notes.iter().map(|n| n.words()).collect();
+    html! {
+        <p class="verdict-notes">
+            { format!("Worth knowing somewhere on the blade: {}. ", words.join("; ")) }<a href="#method">{ "Where" }</a>
+        </p>
     }
 }
 
@@ -84,7 +106,7 @@ fn cells(units: Units, r: &PointResult) -> Vec<Cell> {
         efficiency(r),
         of("Thrust", Quantity::Force, f.thrust_n, format!("thrust coefficient {}", fixed_or_none(f.ct, 4))),
         of("Shaft power", Quantity::Power, f.power_w, torque),
-        plain("Tip Mach number", f.tip_mach, 2, format!("at {}", with_unit(units, Quantity::Rpm, r.rpm))),
+        plain("Tip Mach number", f.tip_mach, 2, mach_words(units, r)),
         departure(r),
         Cell {
             name: "Blade angle at 0.75 R",
@@ -99,6 +121,13 @@ fn cells(units: Units, r: &PointResult) -> Vec<Cell> {
             format!("advance {} a turn", with_unit(units, Quantity::Length, f.effective_pitch_m)),
         ),
     ]
+}
+
+fn mach_words(units: Units, r: &PointResult) -> String {
+    if r.notes.contains(&Note::MachNotReliable) {
+        return "too fast to be relied on".into();
+    }
+    format!("at {}", with_unit(units, Quantity::Rpm, r.rpm))
 }
 
 fn efficiency(r: &PointResult) -> Cell {
