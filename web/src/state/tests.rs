@@ -60,7 +60,7 @@ fn a_wrong_entry_stays_as_typed_says_what_is_allowed_and_changes_nothing() {
     for (field, text, said) in [
         (CHORD_9, "-3", "Allowed is 0 to 1 520 mm."),
         (ANGLE_8, "95", "Allowed is −90 to 90°."),
-        (ANGLE_8, "abc", "Not a number. It was 19.5°."),
+        (ANGLE_8, "abc", "Not a number. It was 21.2°."),
         (Field::Blades, "2.5", "A whole number is needed."),
         (Field::Blades, "13", "Allowed is 1 to 12."),
         (Field::Station(8, Measure::Thickness), "400", "Allowed is 0.33 to 66 mm."),
