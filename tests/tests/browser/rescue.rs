@@ -50,9 +50,9 @@ async fn a_panic_shows_the_same_message() -> Result<()> {
 async fn a_job_that_never_finished_is_not_tried_again_unasked() -> Result<()> {
     drive("held-back", async |browser| {
         browser.open_page().await?;
-        begin_work(browser).await?;
         // A browser that was killed in the middle of the work writes nothing more.
         browser.run("spokeshave.keep.after = () => {}").await?;
+        begin_work(browser).await?;
         browser.reload_unstarted().await?;
         browser.wait_for_text("This job stopped the page last time").await?;
         let file = browser.download(async || browser.press("Save the job as a file").await).await?;
