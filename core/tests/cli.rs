@@ -143,21 +143,27 @@ fn bad_input_is_exit_code_2_and_a_message_by_path() {
     }
 }
 
+/// Every key in a document, however deep.
+fn keys(value: &Value, into: &mut Vec<String>) {
+    match value {
+        Value::Object(o) => {
+            for (k, v) in o {
+                into.push(k.clone());
+                keys(v, into);
+            }
+        }
+        Value::Array(a) => a.iter().for_each(|v| keys(v, into)),
+        _ => {}
+    }
+}
+
 #[test]
 fn the_schema_names_every_key_of_the_demos() {
     let schema = out(&run(&["schema"], ""));
-    fn keys(value: &Value, into: &mut Vec<String>) {
-        match value {
-            Value::Object(o) => o.iter().for_each(|(k, v)| {
-                into.push(k.clone());
-                keys(v, into);
-            }),
-            Value::Array(a) => a.iter().for_each(|v| keys(v, into)),
-            _ => {}
-        }
-    }
     let mut names = Vec::new();
-    DEMOS.iter().for_each(|d| keys(&serde_json::from_str(d.json).unwrap(), &mut names));
+    for d in &DEMOS {
+        keys(&serde_json::from_str(d.json).unwrap(), &mut names);
+    }
     names.sort();
     names.dedup();
     assert!(names.len() > 40);

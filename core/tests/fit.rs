@@ -25,9 +25,9 @@ fn near(got: Option<f64>, expected: f64, share: f64) {
 
 #[test]
 fn every_demo_has_an_answer_at_every_flight_point() {
-    for index in 0..DEMOS.len() {
+    for (index, d) in DEMOS.iter().enumerate() {
         for point in Rig::new(&demo(index)).unwrap().analysis().flight_points {
-            assert_eq!(point.state, State::Ok, "{}: {}", DEMOS[index].name, point.name);
+            assert_eq!(point.state, State::Ok, "{}: {}", d.name, point.name);
         }
     }
 }

@@ -30,7 +30,8 @@ fn scanned(e: &Element, lo: f64, hi: f64, step: f64) -> Option<f64> {
         let t = e.terms(phi);
         e.turning_m_s * t.n - e.axial_m_s * t.m
     };
-    let mut nodes: Vec<f64> = (0..).map(|i| lo + step * f64::from(i)).take_while(|p| *p < hi).collect();
+    let count = ((hi - lo) / step).ceil().max(0.0) as u32;
+    let mut nodes: Vec<f64> = (0..count).map(|i| lo + step * f64::from(i)).collect();
     let small = (0..60).map(|i| NEAR_ZERO_RAD * 1.25f64.powi(i));
     nodes.extend(small.flat_map(|p| [p, -p]).filter(|p| (lo..hi).contains(p)));
     nodes.push(hi);
@@ -65,10 +66,7 @@ prop_compose! {
     }
 }
 
-fn element<'f>(
-    family: &'f Family,
-    (v, turning, angle, solidity, ends): (f64, f64, f64, f64, Ends),
-) -> Element<'f> {
+fn element(family: &Family, (v, turning, angle, solidity, ends): (f64, f64, f64, f64, Ends)) -> Element<'_> {
     let situation = Situation { thickness_ratio: 0.12, reynolds: 3e5, mach: 0.0, stall_delay: 0.0 };
     Element {
         axial_m_s: v,
