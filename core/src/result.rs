@@ -60,7 +60,9 @@ impl State {
             Self::NeedsEngine => "This setting needs an engine, and the job has none.",
             Self::NeedsAircraft => "This setting needs an aircraft, and the job has none.",
             Self::EngineCannotTurnIt => "The engine cannot turn this propeller at any rpm of its curve.",
-            Self::OverLimitRpm => "The propeller would run past the engine's limit.",
+            Self::OverLimitRpm => {
+                "The propeller would run past the engine's limit rpm, or past the last point of its power curve."
+            }
             Self::OutOfReach => "No rpm gives what is asked for.",
         }
     }

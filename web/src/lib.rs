@@ -14,6 +14,7 @@ pub mod number;
 pub mod results;
 pub mod saved_page;
 pub mod state;
+pub mod timing;
 pub mod units;
 pub mod view;
 

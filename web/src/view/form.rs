@@ -168,9 +168,12 @@ pub struct PickProps {
 /// A list to pick from.
 #[component]
 pub fn Pick(props: &PickProps) -> Html {
-    let onchange = props.onpick.reform(|e: Event| {
-        let index = e.target_dyn_into::<HtmlSelectElement>().map_or(0, |s| s.selected_index());
-        usize::try_from(index).unwrap_or(0)
+    let (onpick, picked) = (props.onpick.clone(), props.picked);
+    let onchange = Callback::from(move |e: Event| {
+        let Some(select) = e.target_dyn_into::<HtmlSelectElement>() else { return };
+        onpick.emit(usize::try_from(select.selected_index()).unwrap_or(0));
+        // A choice that is refused does not stand; one that is taken is drawn anew.
+        select.set_selected_index(picked.and_then(|i| i32::try_from(i).ok()).unwrap_or(-1));
     });
     let options = props.options.iter().enumerate().map(|(i, text)| {
         html! { <option key={i} selected={props.picked == Some(i)}>{ text }</option> }

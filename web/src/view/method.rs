@@ -2,7 +2,7 @@
 
 use std::rc::Rc;
 
-use spokeshave::result::{Note, PointResult};
+use spokeshave::result::{Note, PointResult, State};
 use spokeshave::section::Family;
 use yew::prelude::*;
 
@@ -115,7 +115,9 @@ fn Outside(props: &OutsideProps) -> Html {
     html! {
         <>
             <h3>{ format!("Worth knowing at {}", result.name) }</h3>
-            if result.notes.is_empty() {
+            if result.state != State::Ok {
+                <p class="note">{ result.state.sentence() }</p>
+            } else if result.notes.is_empty() {
                 <p class="note">{ "Every station works inside its tables." }</p>
             } else {
                 <ul class="outside">{ for lines }</ul>

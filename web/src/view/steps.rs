@@ -27,9 +27,19 @@ pub fn Steps() -> Html {
     });
     let links = PARTS.iter().enumerate().map(|(i, (id, name))| {
         let on = i == *here;
-        html! { <a href={format!("#{id}")} class={on.then_some("on")} aria-current={on.then_some("true")}>{ *name }</a> }
+        let onclick = Callback::from(|_: MouseEvent| open(id));
+        html! { <a {onclick} href={format!("#{id}")} class={on.then_some("on")} aria-current={on.then_some("true")}>{ *name }</a> }
     });
     html! { <nav class="steps" aria-label="Parts of the page">{ for links }</nav> }
+}
+
+/// Opens the panel of an id, so that a step leads to what it names and not to a closed heading.
+fn open(id: &str) {
+    let part = web_sys::window().and_then(|w| w.document()).and_then(|d| d.get_element_by_id(id));
+    if let Some(panel) = part.filter(|p| p.tag_name() == "DETAILS") {
+        // Setting a plain attribute does not fail.
+        let _ = panel.set_attribute("open", "");
+    }
 }
 
 /// The last part whose top has been passed.

@@ -14,7 +14,7 @@ pub(super) fn facts(station: &StationResult) -> Html {
         ("lift coeff.", figure(s.cl, 2), ""),
         ("drag coeff.", s.cd.map(|cd| significant(cd, 3)), ""),
         ("thrust", Some(significant(s.thrust_n_per_m, 3)), "N/m"),
-        ("drag torque", Some(significant(s.torque_n_m_per_m, 3)), "N m/m"),
+        ("torque", Some(significant(s.torque_n_m_per_m, 3)), "N m/m"),
         ("loss factor", figure(s.loss_factor, 2), ""),
         ("of best L/D", figure(s.share_of_best.map(|share| 100.0 * share), 0), "%"),
     ];
