@@ -4,6 +4,7 @@
 //! views. The browser is touched at the edges only: [`keep`], [`saved_page`], `effect`.
 
 pub mod app;
+pub mod background;
 pub mod blade_view;
 pub mod chart;
 pub mod editor;

@@ -61,6 +61,12 @@ impl Section {
             Outline::from_points(&self.name, &self.outline).map(Some)
         }
     }
+
+    /// Its outline drawn at a thickness ratio; `None` where it has none or cannot be drawn that thick.
+    #[must_use]
+    pub fn outline_at(&self, thickness_ratio: f64) -> Option<Outline> {
+        self.drawn().ok()??.scaled_to(thickness_ratio).ok()
+    }
 }
 
 impl Job {
@@ -69,7 +75,7 @@ impl Job {
     #[must_use]
     pub fn section_outline(&self, name: &str, thickness_ratio: f64) -> Option<Outline> {
         match self.sections.iter().find(|own| own.name == name) {
-            Some(own) => own.drawn().ok()??.scaled_to(thickness_ratio).ok(),
+            Some(own) => own.outline_at(thickness_ratio),
             None => library().outline(name, thickness_ratio),
         }
     }

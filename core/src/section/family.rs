@@ -118,6 +118,21 @@ impl Family {
         (re().fold(f64::INFINITY, f64::min), re().fold(0.0, f64::max))
     }
 
+    /// Every Reynolds number for which there is a polar, rising.
+    #[must_use]
+    pub fn reynolds_numbers(&self) -> Vec<f64> {
+        let mut numbers: Vec<f64> = self.polars.iter().map(|p| p.ln_reynolds.exp().round()).collect();
+        numbers.sort_by(f64::total_cmp);
+        numbers.dedup();
+        numbers
+    }
+
+    /// Every thickness ratio for which there are polars, rising; empty when the polars hold for one section only.
+    #[must_use]
+    pub fn thickness_ratios(&self) -> Vec<f64> {
+        self.rows.iter().map(|r| r.0).filter(|t| *t > 0.0).collect()
+    }
+
     /// Number of polars.
     #[must_use]
     pub fn polar_count(&self) -> usize {

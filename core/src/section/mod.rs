@@ -1,6 +1,7 @@
 //! Blade sections: outlines, tables of lift and drag, the best angle, and what lies beyond the tables.
 
 mod best;
+mod curves;
 mod extend;
 mod family;
 pub mod import;
@@ -13,6 +14,7 @@ pub mod solver;
 mod table;
 
 pub use best::{BAND_SHARE, Best, best, working_band};
+pub use curves::{SectionCurve, section_curves};
 pub use extend::{BLADE_ASPECT_RATIO, Coefficients, Extension};
 pub use family::{About, Family, Landmarks, Outside};
 pub use library::{Library, library};

@@ -15,10 +15,11 @@ pub use template::{Parts, StyleCannotBeInlined};
 
 /// The scripts that start the page, in the order they run. Plain old syntax on purpose: a browser too
 /// old for the page must still be able to read them and say so.
-pub const BOOT_SCRIPTS: [&str; 4] = [
+pub const BOOT_SCRIPTS: [&str; 5] = [
     include_str!("../page/keep.js"),
     include_str!("../page/overlay.js"),
     include_str!("../page/clean.js"),
+    include_str!("../page/background.js"),
     include_str!("../page/start.js"),
 ];
 

@@ -4,4 +4,5 @@ pub mod after_frame;
 pub mod file;
 pub mod keys;
 pub mod remembered;
+pub mod text_file;
 pub mod theme;

@@ -1,7 +1,7 @@
 //! What is picked rather than typed, and what is added to or taken out of a job.
 
 use spokeshave::drawn::{measured_by, with_station};
-use spokeshave::job::{AngleReference, FlightPoint, Job, PitchControl, Problem, Rotation, Setting};
+use spokeshave::job::{AngleReference, FlightPoint, Job, PitchControl, Problem, Rotation, Section, Setting};
 
 /// A change that is picked from a few.
 #[derive(Clone, Debug, PartialEq)]
@@ -16,6 +16,10 @@ pub enum Choice {
     SectionOfAll(String),
     /// The section of a station.
     Section(usize, String),
+    /// A section of the user's own joins the job, in place of one of the same name.
+    JoinSection(Box<Section>),
+    /// A section of the user's own is taken out.
+    RemoveSection(String),
     /// What the engine is set to at a flight point.
     Setting(usize, SettingKind),
     /// Whether Mach number changes lift and drag.
@@ -155,6 +159,8 @@ impl Choice {
             Self::PitchControl(_) => "pitch control".into(),
             Self::SectionOfAll(_) => "section".into(),
             Self::Section(i, _) => format!("section at station {}", i + 1),
+            Self::JoinSection(section) => format!("section \u{201c}{}\u{201d}", section.name),
+            Self::RemoveSection(name) => format!("remove section \u{201c}{name}\u{201d}"),
             Self::Setting(i, _) => format!("setting of {}", point(i)),
             Self::Compressibility(_) => "compressibility".into(),
             Self::StallDelay(_) => "stall delay".into(),
@@ -194,6 +200,8 @@ impl Choice {
                     station.section.clone_from(name);
                 }
             }
+            Self::JoinSection(section) => return Ok(job.with_section(section.as_ref().clone())),
+            Self::RemoveSection(name) => next.sections.retain(|own| own.name != *name),
             Self::Setting(i, to) => set(&mut next, *i, *to, running),
             Self::Compressibility(on) => method.compressibility = *on,
             Self::StallDelay(on) => method.stall_delay = *on,

@@ -15,6 +15,7 @@ pub mod panel;
 pub mod points;
 pub mod reading;
 pub mod room;
+pub mod sections;
 pub mod steps;
 pub mod units;
 pub mod verdict;

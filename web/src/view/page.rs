@@ -13,6 +13,7 @@ use super::panel::Panel;
 use super::points::Points;
 use super::reading::{Lying, MapReading, Standing, StationReading};
 use super::room::{Room, use_room};
+use super::sections::{self, Sections};
 use super::steps::Steps;
 use super::verdict::Verdict;
 use super::{Seen, caution};
@@ -101,7 +102,10 @@ fn Panels(props: &PageProps) -> Html {
                 result={coefficients::in_a_line((*now.point).as_ref())}>
                 <Coefficients curves={later.curves.clone()} point={later.selected()} units={state.units} />
             </Panel>
-            <Panel id="method" number={4} title="How it is computed" result={method_line(props)} open={*open}>
+            <Panel id="sections" number={4} title="Sections" result={sections::in_a_line(state)} open={*open}>
+                <Sections state={state.part(sections::same)} rig={later.rig.clone()} points={later.points.clone()} />
+            </Panel>
+            <Panel id="method" number={5} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>

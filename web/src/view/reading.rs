@@ -3,7 +3,7 @@
 use std::rc::Rc;
 
 use spokeshave::drawn::DrawnStation;
-use spokeshave::job::Rotation;
+use spokeshave::job::{Rotation, Section};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rotor::DepartureMap;
 use spokeshave::section::library;
@@ -195,7 +195,7 @@ pub fn StationReading(props: &PageProps) -> Html {
     let i = state.station;
     let result = now.point.as_ref().as_ref().filter(|r| !r.stations.is_empty());
     let thickness = result.and_then(|r| r.stations.get(i)).map_or(0.0, |s| s.thickness_ratio);
-    let outline = use_outline(shipped_section(props), thickness);
+    let outline = use_outline(section(props), thickness);
     let Some((point, station)) = result.and_then(|r| Some((r, r.stations.get(i)?))) else {
         return html! { <div class="detail">{ no_answer("angle of attack at its stations") }</div> };
     };
@@ -209,19 +209,21 @@ pub fn StationReading(props: &PageProps) -> Html {
     }
 }
 
-/// Name of the station's section where it comes with the program; one that the job brought has tables only.
-fn shipped_section(props: &PageProps) -> Option<String> {
+/// Name of the station's section, and its outline where the job brought one.
+fn section(props: &PageProps) -> Option<(String, Option<Section>)> {
     let job = props.state.job();
     let name = &job.propeller.stations.get(props.state.station)?.section;
-    let own = job.sections.iter().any(|s| s.name == *name);
-    (!own).then(|| name.clone())
+    Some((name.clone(), job.sections.iter().find(|own| own.name == *name).cloned()))
 }
 
-/// The outline of a section at a thickness, made anew only when one of the two changes.
+/// The outline of a section at a thickness, made anew only when one of the two changes; empty where it is not known.
 #[hook]
-fn use_outline(name: Option<String>, thickness_ratio: f64) -> Rc<Vec<[f64; 2]>> {
-    use_memo((name, thickness_ratio.to_bits()), move |(name, _)| {
-        let outline = name.as_ref().and_then(|name| library().outline(name, thickness_ratio));
+fn use_outline(section: Option<(String, Option<Section>)>, thickness_ratio: f64) -> Rc<Vec<[f64; 2]>> {
+    use_memo((section, thickness_ratio.to_bits()), move |(section, _)| {
+        let outline = section.as_ref().and_then(|(name, own)| match own {
+            Some(own) => own.outline_at(thickness_ratio),
+            None => library().outline(name, thickness_ratio),
+        });
         outline.map_or_else(Vec::new, |o| o.points().to_vec())
     })
 }

@@ -4,12 +4,13 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 5] = [
+pub const PARTS: [(&str, &str); 6] = [
     ("departure", "Departure"),
     ("points", "1 Flight points"),
     ("blade", "2 Blade"),
     ("coefficients", "3 Coefficients"),
-    ("method", "4 Method"),
+    ("sections", "4 Sections"),
+    ("method", "5 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.

@@ -8,11 +8,13 @@
 mod compare;
 mod error;
 mod origin;
+mod propose;
 mod request;
 mod summary;
 
 pub use compare::{Comparison, Peak, compare};
 pub use error::MakeError;
+pub use propose::{proposed_reynolds, proposed_thickness};
 pub use request::{Angles, MOST_TASKS, REYNOLDS, ROUGH_NOSE, Request};
 pub use summary::Summary;
 

@@ -41,7 +41,7 @@ fn edge(plan: &Plan) -> String {
 fn counts(made: &[Made]) -> String {
     let tried: usize = made.iter().map(|m| m.points.len()).sum();
     let good: usize = made.iter().map(|m| m.converged().count()).sum();
-    format!("{good} of {tried} points converged; the others are left out")
+    format!("{good} of {tried} points converged; the others are left out, and lines run across their gaps")
 }
 
 fn left_out(made: &[Made]) -> Option<String> {

@@ -16,8 +16,8 @@ pub struct Summary {
     pub best_lift_to_drag: Option<f64>,
     /// Span of angles that keeps 95 % of it, degrees.
     pub working_band_deg: Option<(f64, f64)>,
-    /// Angle of zero lift, degrees.
-    pub zero_lift_deg: f64,
+    /// Angle of zero lift, degrees; none when it lies outside the table.
+    pub zero_lift_deg: Option<f64>,
     /// Greatest lift coefficient in the table.
     pub cl_max: f64,
     /// Least drag coefficient in the table.
@@ -41,11 +41,12 @@ impl Summary {
         let found = best(|a| local.at(a), local.landmarks().stall);
         let band = found.map(|b| working_band(|a| local.at(a), b));
         let figures = polar.points.iter();
+        let crosses = polar.points.windows(2).any(|w| w[0].cl <= 0.0 && w[1].cl > 0.0);
         Ok(Self {
             best_angle_deg: found.map(|b| b.alpha_rad.to_degrees()),
             best_lift_to_drag: found.map(|b| b.lift_to_drag),
             working_band_deg: band.map(|(a, b)| (a.to_degrees(), b.to_degrees())),
-            zero_lift_deg: local.landmarks().zero_lift.to_degrees(),
+            zero_lift_deg: crosses.then(|| local.landmarks().zero_lift.to_degrees()),
             cl_max: figures.clone().map(|p| p.cl).fold(f64::NEG_INFINITY, f64::max),
             cd_min: figures.map(|p| p.cd).fold(f64::INFINITY, f64::min),
         })

@@ -150,7 +150,7 @@ pub(super) fn people(plan: &Plan, made: &[Made]) -> Result<(), Stop> {
                 || "–".into(),
                 |(a, b)| format!("{} to {}", signed(Some(a), 1), signed(Some(b), 1)),
             ),
-            signed(s.map(|s| s.zero_lift_deg), 2),
+            signed(s.and_then(|s| s.zero_lift_deg), 2),
             figure(s.map(|s| s.cl_max), 3),
             figure(s.map(|s| s.cd_min), 5),
         ]

@@ -1,0 +1,25 @@
+//! Reading a text that was picked as a file.
+
+use gloo_file::callbacks::{FileReader, read_as_text};
+use web_sys::HtmlInputElement;
+
+use crate::number::fixed;
+
+/// Reads the file picked in an input and hands on its name with its text, or with why it could not be read. The reading ends
+/// when what is returned is dropped.
+pub fn read_text(
+    input: &HtmlInputElement,
+    most_bytes: usize,
+    heard: impl Fn(String, Result<String, String>) + 'static,
+) -> Option<FileReader> {
+    let file = gloo_file::File::from(input.files()?.get(0)?);
+    // The same file may be picked again.
+    input.set_value("");
+    let name = file.name();
+    if file.size() > most_bytes as u64 {
+        let (found, most) = (fixed(file.size() as f64, 0), fixed(most_bytes as f64, 0));
+        heard(name, Err(format!("The file has {found} bytes; at most {most} are read.")));
+        return None;
+    }
+    Some(read_as_text(&file, move |text| heard(name.clone(), text.map_err(|e| e.to_string()))))
+}
