@@ -55,12 +55,10 @@ pub(super) fn condition(rig: &Rig, at: &Condition) -> Result<Condition, State> {
         }
     }
     let (mut low, near) = last.ok_or(limit)?;
-    let mut high = low + step;
-    while high - low > CONVERGED_M_S {
-        let middle = 0.5 * (low + high);
-        let enough = full(middle, near).ok().and_then(|c| spare(&c)).is_some_and(|s| s >= 0.0);
-        if enough { low = middle } else { high = middle }
-    }
+    // Where there is no full-throttle condition any more, thrust counts as short.
+    let left_over = |v: f64| full(v, near).ok().and_then(|c| spare(&c)).unwrap_or(-1.0);
+    let mut rule = roots::SimpleConvergency { eps: CONVERGED_M_S, max_iter: 60 };
+    low = roots::find_root_brent(low, low + step, left_over, &mut rule).unwrap_or(low);
     let found = full(low, near)?;
     // Where the engine's range ended first, thrust is still above drag.
     let met = spare(&found).is_some_and(|s| s < MET_SHARE * rig.rotor.loads(&found).thrust_n);

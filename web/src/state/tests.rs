@@ -152,8 +152,8 @@ fn a_text_that_was_not_changed_changes_nothing() {
 fn a_drag_is_one_step_and_neighbours_follow() {
     let before = start();
     let held = before.after(Action::Take(7, Measure::Angle));
-    let state = [20.0, 20.5, 21.5].iter().fold(held, |s, &deg| s.after(Action::DragTo(deg)));
-    assert!((angle_deg(&state, 7) - 21.5).abs() < 1e-9);
+    let state = [22.0, 22.5, 23.2].iter().fold(held, |s, &deg| s.after(Action::DragTo(deg)));
+    assert!((angle_deg(&state, 7) - 23.2).abs() < 1e-9);
     assert!((angle_deg(&state, 6) - (angle_deg(&before, 6) + 1.0)).abs() < 1e-9);
     assert!((angle_deg(&state, 5) - angle_deg(&before, 5)).abs() < 1e-9);
     let state = state.after(Action::LetGo);
