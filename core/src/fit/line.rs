@@ -1,8 +1,8 @@
 //! The line of conditions along which the departure map is drawn.
 
-use super::{fixed_throttle, rpm_of, throttle_condition};
+use super::trail::Trail;
+use super::{Solver, highest_rpm, rpm_of};
 use crate::curve::Curve;
-use crate::job::PitchControl;
 use crate::result::State;
 use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, thrustless_speed_m_s};
@@ -39,10 +39,9 @@ pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
 /// Full-throttle conditions at rising speeds, held to the limit rpm, up to the first that has none.
 fn full_throttle(rig: &Rig, at: &Condition, speeds: impl Iterator<Item = f64>) -> Vec<Condition> {
     let Some(shaft) = &rig.shaft else { return Vec::new() };
-    let governed = matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. });
-    let highest = shaft.limit_rpm().unwrap_or(f64::INFINITY).min(shaft.rpm_range().1);
-    let mut near = None;
-    let mut held = false;
+    let highest = highest_rpm(shaft);
+    let mut trail = Trail::default();
+    let (mut matched, mut held) = (false, false);
     speeds
         .map_while(|v| {
             let here = Condition { airspeed_m_s: v, ..*at };
@@ -50,15 +49,16 @@ fn full_throttle(rig: &Rig, at: &Condition, speeds: impl Iterator<Item = f64>) -
             if held {
                 return Some(at_limit);
             }
-            let full = if governed {
-                throttle_condition(rig, &here, 1.0)
-            } else {
-                fixed_throttle(rig, shaft, &here, 1.0, near)
-            };
+            let full = Solver::new(rig).throttle(&here, 1.0, &trail);
             // Only past a speed that was matched: a propeller too fine to be run up at rest has no such line.
-            held = full == Err(State::OverLimitRpm) && near.is_some();
-            near = full.as_ref().ok().map(rpm_of);
-            if held { Some(at_limit) } else { full.ok() }
+            held = matched && full.as_ref().is_err_and(|e| *e == State::OverLimitRpm);
+            if held {
+                return Some(at_limit);
+            }
+            let met = full.ok()?;
+            trail.push(&met);
+            matched = true;
+            Some(met.condition)
         })
         .collect()
 }

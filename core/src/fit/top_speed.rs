@@ -1,17 +1,25 @@
 //! Top speed: the fastest level flight at full throttle.
 
-use super::{fixed_throttle, rpm_of, throttle_condition};
-use crate::aircraft::thrust_asked_n;
-use crate::job::PitchControl;
+use std::cell::RefCell;
+
+use super::Solver;
+use super::root::{Search, Wanted};
+use super::settle::Met;
+use super::trail::Trail;
+use crate::aircraft::{speeds, thrust_asked_n};
+use crate::job::Aircraft;
 use crate::result::State;
 use crate::rig::Rig;
 use crate::rotor::Condition;
 
-/// Steps over speed.
-const STEPS: u32 = 40;
+/// How far a step goes, as a share of the speed.
+const STEP: f64 = 0.15;
+/// Where an aeroplane's steps begin, as a share of the speed of least power: below it the drag's power rises and the propeller's falls.
+const FIRST: f64 = 0.7;
+/// Where a multirotor's steps begin, m/s.
+const FIRST_CLIMBING_M_S: f64 = 1.0;
 /// Fastest speed considered, as a Mach number.
 const FASTEST_MACH: f64 = 0.7;
-const CONVERGED_M_S: f64 = 1e-6;
 /// Thrust that may be left over, as a share of it.
 const MET_SHARE: f64 = 1e-3;
 
@@ -20,47 +28,96 @@ const MET_SHARE: f64 = 1e-3;
 /// # Errors
 /// No aircraft or engine, or thrust below drag at every speed.
 pub(super) fn condition(rig: &Rig, at: &Condition) -> Result<Condition, State> {
-    let aircraft = rig.job.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
-    let shaft = rig.shaft.as_ref().ok_or(State::NeedsEngine)?;
-    let governed = matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. });
-    let full = |v: f64, near: Option<f64>| {
-        let here = Condition { airspeed_m_s: v, ..*at };
-        if governed {
-            throttle_condition(rig, &here, 1.0)
-        } else {
-            fixed_throttle(rig, shaft, &here, 1.0, near)
-        }
-    };
-    let spare = |c: &Condition| {
-        let asked = thrust_asked_n(aircraft, &at.air, c.airspeed_m_s)?;
-        Some(rig.rotor.loads(c).thrust_n - asked)
-    };
-    let step = FASTEST_MACH * at.air.sound_speed_m_s / f64::from(STEPS);
-    let (mut near, mut last, mut limit) = (None, None, State::OverLimitRpm);
-    for v in (1..=STEPS).map(|i| step * f64::from(i)) {
-        match full(v, near) {
-            Ok(c) => {
-                near = Some(rpm_of(&c));
-                match spare(&c) {
-                    Some(s) if s >= 0.0 => last = Some((v, near)),
-                    _ if last.is_some() => break,
-                    _ => limit = State::OutOfReach,
-                }
-            }
-            // Past the engine's range before thrust falls to drag: that is what stops the aircraft.
-            Err(state) => {
-                limit = state;
-                break;
-            }
+    let exact = Chase::new(Solver { rig, rough: false }, at)?;
+    let rough = Chase::new(Solver { rig, rough: true }, at)?;
+    let found = rough.step_by_step().ok().and_then(|(low, high, _)| exact.met(&rough, low, high));
+    if let Some(condition) = found {
+        return Ok(condition);
+    }
+    // Where few elements do not lead there, all of them look again.
+    let (low, high, limit) = exact.step_by_step()?;
+    exact.met(&exact, low, high).ok_or(limit)
+}
+
+struct Chase<'r> {
+    solver: Solver<'r>,
+    aircraft: &'r Aircraft,
+    at: Condition,
+}
+
+impl<'r> Chase<'r> {
+    fn new(solver: Solver<'r>, at: &Condition) -> Result<Self, State> {
+        let aircraft = solver.rig.job.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
+        solver.rig.shaft.as_ref().ok_or(State::NeedsEngine)?;
+        Ok(Self { solver, aircraft, at: *at })
+    }
+
+    fn full(&self, airspeed_m_s: f64, trail: &Trail) -> Result<Met, State> {
+        self.solver.throttle(&Condition { airspeed_m_s, ..self.at }, 1.0, trail)
+    }
+
+    /// Thrust above what is asked.
+    fn spare_n(&self, met: &Met) -> Option<f64> {
+        let asked = thrust_asked_n(self.aircraft, &self.at.air, met.condition.airspeed_m_s)?;
+        Some(met.loads.thrust_n - asked)
+    }
+
+    fn first_m_s(&self) -> f64 {
+        match self.aircraft {
+            Aircraft::Aeroplane(a) => FIRST * speeds(a, &self.at.air).least_power_m_s,
+            Aircraft::Multirotor(_) => FIRST_CLIMBING_M_S,
         }
     }
-    let (mut low, near) = last.ok_or(limit)?;
-    // Where there is no full-throttle condition any more, thrust counts as short.
-    let left_over = |v: f64| full(v, near).ok().and_then(|c| spare(&c)).unwrap_or(-1.0);
-    let mut rule = roots::SimpleConvergency { eps: CONVERGED_M_S, max_iter: 60 };
-    low = roots::find_root_brent(low, low + step, left_over, &mut rule).unwrap_or(low);
-    let found = full(low, near)?;
-    // Where the engine's range ended first, thrust is still above drag.
-    let met = spare(&found).is_some_and(|s| s < MET_SHARE * rig.rotor.loads(&found).thrust_n);
-    if met { Ok(found) } else { Err(limit) }
+
+    /// The step over which thrust ceases to suffice, and what ends it.
+    fn step_by_step(&self) -> Result<(f64, f64, State), State> {
+        let fastest = FASTEST_MACH * self.at.air.sound_speed_m_s;
+        let (mut trail, mut last, mut limit) = (Trail::default(), None, State::OverLimitRpm);
+        let mut v = self.first_m_s();
+        while v < fastest {
+            match self.full(v, &trail) {
+                Ok(met) => {
+                    trail.push(&met);
+                    match self.spare_n(&met) {
+                        Some(s) if s >= 0.0 => last = Some(v),
+                        _ if last.is_some() => break,
+                        _ => limit = State::OutOfReach,
+                    }
+                }
+                // Past the engine's range before thrust falls to drag: that is what stops the aircraft.
+                Err(state) => {
+                    limit = state;
+                    break;
+                }
+            }
+            v *= 1.0 + STEP;
+        }
+        last.map(|low| (low, low * (1.0 + STEP), limit)).ok_or(limit)
+    }
+
+    /// How much thrust is short at a speed; where there is no full-throttle condition, some is.
+    fn short_n(&self, airspeed_m_s: f64, trail: &RefCell<Trail>) -> f64 {
+        let met = self.full(airspeed_m_s, &trail.borrow()).ok();
+        let spare = met.and_then(|met| {
+            trail.borrow_mut().push(&met);
+            self.spare_n(&met)
+        });
+        spare.map_or(1.0, |spare| -spare)
+    }
+
+    /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends first.
+    fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Condition> {
+        let (trail, rough_trail) = (RefCell::default(), RefCell::default());
+        let search = Search {
+            range: low..=high,
+            steps: 1,
+            wanted: Wanted::Highest,
+            rough: &|v| rough.short_n(v, &rough_trail),
+            exact: &|v| self.short_n(v, &trail),
+        };
+        let top = search.root().ok()?.0.x;
+        let met = self.full(top, &trail.borrow()).ok()?;
+        let spare = self.spare_n(&met)?.abs();
+        (spare < MET_SHARE * met.loads.thrust_n).then_some(met.condition)
+    }
 }

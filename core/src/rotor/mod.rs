@@ -75,25 +75,34 @@ pub struct Rotor {
     pub blade: Blade,
     method: Method,
     rings: Vec<Ring>,
+    /// Few elements, for a first look.
+    rough_rings: Vec<Ring>,
 }
+
+/// Elements of a first look.
+const ROUGH_ELEMENTS: u32 = 12;
 
 impl Rotor {
     /// A propeller by its blade and the method's settings.
     #[must_use]
     pub fn new(blade: Blade, method: &Method) -> Self {
-        let n = method.elements;
-        let (rh, span) = (blade.hub_radius_m, blade.radius_m - blade.hub_radius_m);
-        let mut rotor = Self { blade, method: method.clone(), rings: Vec::new() };
-        let step = PI / f64::from(n);
-        rotor.rings = (0..n)
-            .map(|i| {
-                let t = (f64::from(i) + 0.5) * step;
-                let mut ring = rotor.ring(rh + 0.5 * span * (1.0 - t.cos()));
-                ring.width_m = 0.5 * span * t.sin() * step;
-                ring
-            })
-            .collect();
+        let mut rotor = Self { blade, method: method.clone(), rings: Vec::new(), rough_rings: Vec::new() };
+        rotor.rings = rotor.elements(method.elements);
+        rotor.rough_rings = rotor.elements(method.elements.min(ROUGH_ELEMENTS));
         rotor
+    }
+
+    /// Cosine-spaced elements between hub and tip.
+    fn elements(&self, count: u32) -> Vec<Ring> {
+        let (rh, span) = (self.blade.hub_radius_m, self.blade.radius_m - self.blade.hub_radius_m);
+        let step = PI / f64::from(count);
+        let element = |i: u32| {
+            let t = (f64::from(i) + 0.5) * step;
+            let mut ring = self.ring(rh + 0.5 * span * (1.0 - t.cos()));
+            ring.width_m = 0.5 * span * t.sin() * step;
+            ring
+        };
+        (0..count).map(element).collect()
     }
 
     /// The element at a radius, m.
@@ -148,8 +157,18 @@ impl Rotor {
     /// Thrust and torque at a condition.
     #[must_use]
     pub fn loads(&self, at: &Condition) -> Loads {
+        self.sum(&self.rings, at)
+    }
+
+    /// The same by few elements: within some per cent, for a first look.
+    #[must_use]
+    pub fn rough_loads(&self, at: &Condition) -> Loads {
+        self.sum(&self.rough_rings, at)
+    }
+
+    fn sum(&self, rings: &[Ring], at: &Condition) -> Loads {
         let mut sum = Loads::default();
-        for ring in &self.rings {
+        for ring in rings {
             match self.element(ring, at).0.balance() {
                 Some(balance) => {
                     let (thrust, torque) = self.grading(ring, at, &balance);

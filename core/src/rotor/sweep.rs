@@ -2,7 +2,7 @@
 
 use std::f64::consts::TAU;
 
-use roots::{SimpleConvergency, find_root_brent};
+use roots::{SimpleConvergency, find_root_brent, find_root_secant};
 use serde::Serialize;
 
 use super::{Condition, Loads, Rotor};
@@ -88,16 +88,25 @@ pub fn curve_point(rotor: &Rotor, at: &Condition, airspeed_m_s: f64) -> CurvePoi
     }
 }
 
-/// The speed (m/s) at which thrust is gone, by steps of a tenth in J and Brent's method; at least J = 0.1, at most 6.
+/// The speed (m/s) at which thrust is gone, by steps of a tenth in J with few elements, secant steps and, where these fail, Brent's
+/// method with all of them; at least J = 0.1, at most 6.
 #[must_use]
 pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
+    const STEP: f64 = 0.1;
     let unit = at.turns_per_s() * 2.0 * rotor.blade.radius_m;
-    let thrust = |j: f64| rotor.loads(&Condition { airspeed_m_s: j * unit, ..*at }).thrust_n;
-    let Some(over) = (1..=60).map(|i| 0.1 * f64::from(i)).find(|&j| thrust(j) < 0.0) else {
-        return 6.0 * unit;
-    };
+    let here = |j: f64| Condition { airspeed_m_s: j * unit, ..*at };
+    let thrust = |j: f64| rotor.loads(&here(j)).thrust_n;
+    let over = |gone: &dyn Fn(f64) -> bool| (1..=60).map(|i| STEP * f64::from(i)).find(|&j| gone(j));
+    let rough = over(&|j| rotor.rough_loads(&here(j)).thrust_n < 0.0);
+    let mut rule = SimpleConvergency { eps: 1e-7, max_iter: 8 };
+    if let Some(j) = rough.and_then(|j| find_root_secant(j - STEP, j, thrust, &mut rule).ok())
+        && rough.is_some_and(|end| (end - 1.5 * STEP..end + 0.5 * STEP).contains(&j))
+    {
+        return j.max(STEP) * unit;
+    }
+    let Some(over) = over(&|j| thrust(j) < 0.0) else { return 6.0 * unit };
     let mut rule = SimpleConvergency { eps: 1e-7, max_iter: 40 };
-    find_root_brent(over - 0.1, over, thrust, &mut rule).unwrap_or(over).max(0.1) * unit
+    find_root_brent(over - STEP, over, thrust, &mut rule).unwrap_or(over).max(STEP) * unit
 }
 
 #[cfg(test)]

@@ -1,0 +1,41 @@
+//! What matching costs: one flight point, the line of the map.
+
+use std::hint::black_box;
+
+use criterion::{Criterion, criterion_group, criterion_main};
+use spokeshave::fit;
+use spokeshave::job::{DEMOS, FlightPoint, Job, Setting};
+use spokeshave::rig::{Rig, air_of};
+
+fn rig() -> Rig {
+    Rig::new(&Job::from_json(DEMOS[0].json).expect("a valid demo")).expect("a valid demo")
+}
+
+fn point(airspeed_m_s: Option<f64>, setting: Setting) -> FlightPoint {
+    FlightPoint { name: "here".into(), altitude_m: 0.0, isa_offset_k: 0.0, airspeed_m_s, setting }
+}
+
+fn flight_points(c: &mut Criterion) {
+    let rig = rig();
+    let settings = [
+        ("full throttle at 30 m/s", point(Some(30.0), Setting::FullThrottle {})),
+        ("level flight at 45 m/s", point(Some(45.0), Setting::Level {})),
+        ("a power of 25 kW at 40 m/s", point(Some(40.0), Setting::Power { power_w: 25_000.0 })),
+        ("top speed", point(None, Setting::FullThrottle {})),
+    ];
+    for (name, point) in &settings {
+        let air = air_of(point).expect("a standard air");
+        c.bench_function(name, |b| b.iter(|| fit::condition(&rig, black_box(point), air)));
+    }
+}
+
+fn line(c: &mut Criterion) {
+    let rig = rig();
+    let at = rig.condition(2).expect("cruise has an answer");
+    c.bench_function("full-throttle line of the map, 60 speeds", |b| {
+        b.iter(|| fit::line(&rig, black_box(&at), 60));
+    });
+}
+
+criterion_group!(benches, flight_points, line);
+criterion_main!(benches);
