@@ -1,11 +1,15 @@
 //! Packs `airfoils/*/polars.csv` and `family.json` into one compact table that the library embeds.
-//!
-//! Figures are kept as integers at the precision of the tables: angles in 0.01°, lift in 1e-4, drag in 1e-5.
 
 use std::error::Error;
 use std::path::{Path, PathBuf};
 
-use serde::{Deserialize, Serialize};
+use serde::Deserialize;
+
+use packed::{ALPHA_STEPS, CD_STEPS, CL_STEPS, Column, PackedFamily, PackedPolar};
+
+#[expect(dead_code, reason = "only the library unpacks")]
+#[path = "src/section/packed.rs"]
+mod packed;
 
 #[derive(Deserialize)]
 struct FamilyFile {
@@ -35,28 +39,6 @@ struct Row {
     state: String,
 }
 
-#[derive(Serialize)]
-struct PackedFamily {
-    name: String,
-    title: String,
-    origin: String,
-    korn_factor: f64,
-    face_angle_deg: Vec<(f64, f64)>,
-    outline: String,
-    polars: Vec<PackedPolar>,
-}
-
-#[derive(Serialize)]
-struct PackedPolar {
-    thickness_ratio: f64,
-    reynolds: f64,
-    mach: f64,
-    n_crit: f64,
-    alpha: Vec<i16>,
-    cl: Vec<i32>,
-    cd: Vec<u32>,
-}
-
 fn main() -> Result<(), Box<dyn Error>> {
     let root = PathBuf::from(std::env::var("CARGO_MANIFEST_DIR")?).join("../airfoils");
     println!("cargo::rerun-if-changed={}", root.display());
@@ -75,6 +57,7 @@ fn main() -> Result<(), Box<dyn Error>> {
 fn pack(folder: &Path) -> Result<PackedFamily, Box<dyn Error>> {
     let family: FamilyFile = serde_json::from_slice(&std::fs::read(folder.join("family.json"))?)?;
     let mut polars: Vec<PackedPolar> = Vec::new();
+    let (mut alpha, mut cl, mut cd) = (Vec::new(), Vec::new(), Vec::new());
     for row in csv::Reader::from_path(folder.join("polars.csv"))?.deserialize() {
         let row: Row = row?;
         let same = |p: &PackedPolar| {
@@ -82,23 +65,17 @@ fn pack(folder: &Path) -> Result<PackedFamily, Box<dyn Error>> {
                 == (row.thickness_ratio, row.reynolds, row.mach, row.n_crit)
         };
         if !polars.last().is_some_and(same) {
-            polars.push(PackedPolar {
-                thickness_ratio: row.thickness_ratio,
-                reynolds: row.reynolds,
-                mach: row.mach,
-                n_crit: row.n_crit,
-                alpha: vec![],
-                cl: vec![],
-                cd: vec![],
-            });
+            let Row { thickness_ratio, reynolds, mach, n_crit, .. } = row;
+            polars.push(PackedPolar { thickness_ratio, reynolds, mach, n_crit, points: 0 });
         }
         // A row the solver could not answer stays out; nothing stands in for it.
-        if let (Some(polar), "ok", Some(cl), Some(cd)) =
+        if let (Some(polar), "ok", Some(lift), Some(drag)) =
             (polars.last_mut(), row.state.as_str(), row.cl, row.cd)
         {
-            polar.alpha.push((row.alpha_deg * 100.0).round() as i16);
-            polar.cl.push((cl * 1e4).round() as i32);
-            polar.cd.push((cd * 1e5).round() as u32);
+            polar.points += 1;
+            alpha.push(row.alpha_deg);
+            cl.push(lift);
+            cd.push(drag);
         }
     }
     Ok(PackedFamily {
@@ -109,5 +86,20 @@ fn pack(folder: &Path) -> Result<PackedFamily, Box<dyn Error>> {
         face_angle_deg: family.face_angle_deg.iter().map(|f| (f.thickness_ratio, f.angle_deg)).collect(),
         outline: std::fs::read_to_string(folder.join("outline.dat")).unwrap_or_default(),
         polars,
+        alpha: column(&alpha, ALPHA_STEPS),
+        cl: column(&cl, CL_STEPS),
+        cd: column(&cd, CD_STEPS),
     })
+}
+
+/// Figures in steps of `1 / steps`, by their second differences.
+fn column(figures: &[f64], steps: f64) -> Column {
+    let (mut last, mut slope) = (0, 0);
+    let mut bend = |figure: &f64| {
+        let value = (figure * steps).round() as i32;
+        let (rise, was) = (value - last, slope);
+        (last, slope) = (value, rise);
+        rise - was
+    };
+    Column(figures.iter().map(&mut bend).collect())
 }

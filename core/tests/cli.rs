@@ -1,33 +1,12 @@
 //! The command line as a script meets it: output, exit codes, messages.
 #![cfg(feature = "cli")]
 
-use std::io::Write;
-use std::process::{Command, Output, Stdio};
+mod command;
 
+use command::{err, out, run};
 use serde_json::Value;
 use spokeshave::job::{DEMOS, Job};
 use spokeshave::rig::Rig;
-
-fn run(args: &[&str], input: &str) -> Output {
-    let mut child = Command::new(env!("CARGO_BIN_EXE_spokeshave"))
-        .args(args)
-        .stdin(Stdio::piped())
-        .stdout(Stdio::piped())
-        .stderr(Stdio::piped())
-        .spawn()
-        .unwrap();
-    // A command that refuses its arguments closes its input early.
-    let _ = child.stdin.take().unwrap().write_all(input.as_bytes());
-    child.wait_with_output().unwrap()
-}
-
-fn out(o: &Output) -> String {
-    String::from_utf8(o.stdout.clone()).unwrap()
-}
-
-fn err(o: &Output) -> String {
-    String::from_utf8(o.stderr.clone()).unwrap()
-}
 
 #[test]
 fn analyse_prints_the_library_s_numbers_as_json() {
@@ -175,4 +154,24 @@ fn the_schema_names_every_key_of_the_demos() {
 #[test]
 fn help_has_examples() {
     assert!(out(&run(&["--help"], "")).contains("Examples:"));
+}
+
+#[test]
+fn the_tables_of_one_family_are_listed() {
+    let o = run(&["sections", "clark-y", "--thickness", "12"], "");
+    assert_eq!(o.status.code(), Some(0), "{}", err(&o));
+    assert!(out(&o).contains("lift-to-drag") && out(&o).lines().count() >= 10, "{}", out(&o));
+    let csv = out(&run(&["sections", "clark-y", "--csv"], ""));
+    assert!(csv.starts_with("reynolds,alpha_deg,cl,cd\n30000,"), "{}", &csv[..80]);
+    for (args, said) in [
+        (["sections", "clark", "--thickness", "12"], "no section \"clark\"; there are arc-back"),
+        (
+            ["sections", "clark-y", "--thickness", "40"],
+            "--thickness 40: clark-y has tables for 6 to 24 percent",
+        ),
+    ] {
+        let o = run(&args, "");
+        assert_eq!(o.status.code(), Some(2));
+        assert!(err(&o).contains(said), "{}", err(&o));
+    }
 }

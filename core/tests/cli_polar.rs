@@ -1,33 +1,12 @@
 //! `polar` and `import` as a script meets them.
 #![cfg(feature = "cli")]
 
-use std::io::Write;
-use std::process::{Command, Output, Stdio};
+mod command;
 
+use command::{err, out, run};
 use serde_json::{Value, json};
 use spokeshave::job::{DEMOS, Job};
 use spokeshave::section::outline::clark_y;
-
-fn run(args: &[&str], input: &str) -> Output {
-    let mut child = Command::new(env!("CARGO_BIN_EXE_spokeshave"))
-        .args(args)
-        .stdin(Stdio::piped())
-        .stdout(Stdio::piped())
-        .stderr(Stdio::piped())
-        .spawn()
-        .unwrap();
-    // A command that refuses its arguments closes its input early.
-    let _ = child.stdin.take().unwrap().write_all(input.as_bytes());
-    child.wait_with_output().unwrap()
-}
-
-fn out(o: &Output) -> String {
-    String::from_utf8(o.stdout.clone()).unwrap()
-}
-
-fn err(o: &Output) -> String {
-    String::from_utf8(o.stderr.clone()).unwrap()
-}
 
 /// Clark Y as a list, flat face on the axis.
 fn outline() -> String {

@@ -13,7 +13,7 @@ use wasm_bindgen::JsCast;
 use yew::prelude::*;
 
 use crate::effect::remembered::Remembered;
-use crate::effect::{keys, theme};
+use crate::effect::{file, keys, theme};
 use crate::later::{Plan, Work};
 use crate::results::Results;
 use crate::state::{Action, State};
@@ -33,7 +33,7 @@ impl Reducible for Store {
 
 fn started() -> Store {
     let kept = keep::at_start();
-    let state = State::started(kept.as_deref());
+    let state = State::started(kept.as_deref(), keep::in_file().as_deref());
     if kept.is_some() && state.notice.is_some() {
         keep::set_aside();
     }
@@ -144,6 +144,7 @@ pub fn App() -> Html {
         let dispatcher = store.dispatcher();
         use_callback((), move |action: Action, ()| dispatcher.dispatch(action))
     };
+    use_drops(&act);
     use_keys(&act, !store.0.drafts.is_empty());
     use_effect_with(Remembered::of(&store.0), |remembered| remembered.write());
     use_effect_with(store.0.theme, |picked| theme::show(*picked));
@@ -153,6 +154,33 @@ pub fn App() -> Html {
             <Page state={view::Seen::new(Rc::new(store.0.clone()))} {now} {later} />
         </ContextProvider<view::Act>>
     }
+}
+
+/// A job file dropped anywhere on the page is opened.
+#[hook]
+fn use_drops(act: &Callback<Action>) {
+    let act = act.clone();
+    use_effect_with((), move |()| {
+        let reading = RefCell::new(None);
+        let options = gloo_events::EventListenerOptions::enable_prevent_default();
+        let listeners = web_sys::window().map(|window| {
+            // Without this the browser would show the file in place of the page.
+            let over = EventListener::new_with_options(
+                &window,
+                "dragover",
+                options,
+                web_sys::Event::prevent_default,
+            );
+            let dropped = EventListener::new_with_options(&window, "drop", options, move |event| {
+                event.prevent_default();
+                let act = act.clone();
+                let read = |e| file::read_dropped(e, move |action| act.emit(action));
+                *reading.borrow_mut() = event.dyn_ref().and_then(read);
+            });
+            (over, dropped)
+        });
+        move || drop(listeners)
+    });
 }
 
 #[hook]

@@ -9,6 +9,8 @@ use wasm_bindgen::prelude::wasm_bindgen;
 extern "C" {
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = atStart)]
     fn job_at_start() -> Option<String>;
+    #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = inFile)]
+    fn job_in_file() -> Option<String>;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = before)]
     fn keep_before(json: &str) -> bool;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = after)]
@@ -24,6 +26,12 @@ extern "C" {
 #[must_use]
 pub fn at_start() -> Option<String> {
     job_at_start()
+}
+
+/// The job this very file was saved with, as JSON.
+#[must_use]
+pub fn in_file() -> Option<String> {
+    job_in_file()
 }
 
 /// Keeps the job; call before working it out, so that a crash finds it kept. Marks the work as begun:

@@ -22,7 +22,14 @@ struct Found(Vec<Problem>);
 
 impl Found {
     fn refuse(&mut self, path: String, found: impl Display, allowed: impl Into<String>) {
-        self.0.push(Problem { path, found: found.to_string(), allowed: allowed.into(), span: None });
+        let (found, allowed) = (found.to_string(), allowed.into());
+        self.0.push(Problem { path, found, allowed, span: None, above_lowest: false });
+    }
+
+    /// The same, where the lowest value itself is not allowed.
+    fn above(&mut self, lowest: f64, highest: f64) {
+        self.within(lowest, highest);
+        self.0.iter_mut().last().into_iter().for_each(|problem| problem.above_lowest = true);
     }
 
     /// Says of the latest problem what span of values is allowed.
@@ -252,7 +259,7 @@ fn check_stations(found: &mut Found, job: &Job) {
         let widest = job.propeller.diameter_m;
         if !(s.chord_m > 0.0 && s.chord_m <= widest) {
             found.refuse(at("chord_m"), s.chord_m, format!("above 0, up to the diameter, {widest} m"));
-            found.within(0.0, widest);
+            found.above(0.0, widest);
         }
         found.range(at("thickness_ratio"), s.thickness_ratio, 0.005..=1.0, "of the chord");
         check_angle(found, &at, s);
@@ -272,13 +279,11 @@ fn check_angle(found: &mut Found, at: &impl Fn(&str) -> String, s: &Station) {
 
 fn check_section_name(found: &mut Found, path: String, s: &Station, job: &Job) {
     let own = job.sections.iter().find(|own| own.name == s.section);
-    let shipped = library().family(&s.section, job.method.n_crit);
-    if own.is_none() && shipped.is_none() {
+    if !section_name_known(job, &s.section) {
         found.refuse(path, format!("\"{}\"", s.section), format!("one of {}", known_names(job)));
         return;
     }
-    let has_face =
-        own.map_or_else(|| shipped.is_some_and(|f| !f.about.face_angle_deg.is_empty()), Section::has_face);
+    let has_face = own.map_or_else(|| library().has_face(&s.section), Section::has_face);
     if job.propeller.angle_reference == AngleReference::FlatFace && !has_face {
         let allowed = "a section with a flat face while angle_reference is flat-face";
         found.refuse(path, format!("\"{}\" has no flat face", s.section), allowed);

@@ -15,6 +15,8 @@ pub struct Problem {
     pub allowed: String,
     /// Lowest and highest value allowed, in the unit the path's name ends with, where a span says it all.
     pub span: Option<(f64, f64)>,
+    /// Whether the lowest value itself is refused.
+    pub above_lowest: bool,
 }
 
 impl fmt::Display for Problem {
@@ -28,7 +30,7 @@ impl fmt::Display for Problem {
 #[non_exhaustive]
 pub enum JobError {
     /// The file is larger than any job.
-    #[error("the file has {found_bytes} bytes; a job has at most {MOST_BYTES}")]
+    #[error("the file has {:.1} MB; a job has at most {} MB", *found_bytes as f64 / 1e6, MOST_BYTES / 1_000_000)]
     TooLarge {
         /// Its size.
         found_bytes: usize,
@@ -49,6 +51,9 @@ pub enum JobError {
         /// What stands there.
         found: String,
     },
+    /// Some other JSON.
+    #[error("spokeshave: missing, so this is no job file; one says \"spokeshave\": {VERSION}")]
+    NoVersion,
     /// A name is unknown or missing, or a value is of the wrong type.
     #[error("{path}: {message}")]
     Shape {
@@ -63,6 +68,6 @@ pub enum JobError {
 }
 
 /// Largest job file read, bytes.
-pub const MOST_BYTES: usize = 16 * 1024 * 1024;
+pub const MOST_BYTES: usize = 16_000_000;
 /// Version of the file's contract.
 pub const VERSION: u32 = 1;

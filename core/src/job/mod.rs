@@ -34,8 +34,8 @@ impl Job {
         if text.len() > MOST_BYTES {
             return Err(JobError::TooLarge { found_bytes: text.len() });
         }
-        let value: Value = serde_json::from_str(text.trim_start_matches('\u{feff}'))
-            .map_err(|e| JobError::Syntax { line: e.line(), column: e.column(), message: e.to_string() })?;
+        let value: Value =
+            serde_json::from_str(text.trim_start_matches('\u{feff}')).map_err(|e| syntax_error(&e))?;
         check_version(&value)?;
         let job: Self = serde_path_to_error::deserialize(value).map_err(|e| shape_error(&e))?;
         match job.check() {
@@ -62,8 +62,18 @@ fn check_version(value: &Value) -> Result<(), JobError> {
     match value.get("spokeshave") {
         Some(v) if v.as_u64() == Some(u64::from(VERSION)) => Ok(()),
         Some(other) => Err(JobError::Version { found: other.to_string() }),
-        None => Err(JobError::Version { found: "missing".into() }),
+        None => Err(JobError::NoVersion),
     }
+}
+
+fn syntax_error(e: &serde_json::Error) -> JobError {
+    let text = e.to_string();
+    let message = match text.rsplit_once(" at line ") {
+        _ if e.is_eof() => "the text ends in the middle; part of the file is missing",
+        Some((what, _)) => what,
+        None => &text,
+    };
+    JobError::Syntax { line: e.line(), column: e.column(), message: message.into() }
 }
 
 fn shape_error(e: &serde_path_to_error::Error<serde_json::Error>) -> JobError {

@@ -5,33 +5,10 @@
 
 use std::sync::{Arc, OnceLock};
 
-use serde::Deserialize;
-
 use super::family::{About, Family};
 use super::outline::Outline;
+use super::packed::{ALPHA_STEPS, CD_STEPS, CL_STEPS, PackedFamily, PackedPolar};
 use super::polar::{FEWEST_POINTS, Polar, PolarPoint};
-
-#[derive(Debug, Deserialize)]
-struct PackedFamily {
-    name: String,
-    title: String,
-    origin: String,
-    korn_factor: f64,
-    face_angle_deg: Vec<(f64, f64)>,
-    outline: String,
-    polars: Vec<PackedPolar>,
-}
-
-#[derive(Debug, Deserialize)]
-struct PackedPolar {
-    thickness_ratio: f64,
-    reynolds: f64,
-    mach: f64,
-    n_crit: f64,
-    alpha: Vec<i16>,
-    cl: Vec<i32>,
-    cd: Vec<u32>,
-}
 
 /// One family; its tables are made ready when first asked for.
 #[derive(Debug)]
@@ -81,6 +58,18 @@ impl Library {
         base.scaled_to(thickness_ratio).ok()
     }
 
+    /// Title of a family.
+    #[must_use]
+    pub fn title(&self, name: &str) -> Option<&str> {
+        Some(&self.entry(name)?.packed.title)
+    }
+
+    /// Whether a family has a flat face to lay a protractor on.
+    #[must_use]
+    pub fn has_face(&self, name: &str) -> bool {
+        self.entry(name).is_some_and(|e| !e.packed.face_angle_deg.is_empty())
+    }
+
     /// The values of n for which a family has tables.
     #[must_use]
     pub fn n_crits(&self, name: &str) -> Vec<f64> {
@@ -108,23 +97,24 @@ fn one_set(packed: &PackedFamily, n: f64) -> Option<Family> {
         face_angle_deg: packed.face_angle_deg.clone(),
         korn_factor: packed.korn_factor,
     };
-    let of_n = packed.polars.iter().filter(|p| p.n_crit == n && p.alpha.len() >= FEWEST_POINTS);
-    Family::new(about, &of_n.map(polar).collect::<Vec<_>>()).ok()
+    let of_n =
+        polars(packed).into_iter().filter(|(p, points)| p.n_crit == n && points.len() >= FEWEST_POINTS);
+    Family::new(about, &of_n.map(|(head, points)| polar(head, points)).collect::<Vec<_>>()).ok()
 }
 
-fn polar(packed: &PackedPolar) -> Polar {
-    let figures = packed.alpha.iter().zip(&packed.cl).zip(&packed.cd);
-    let points = figures
-        .map(|((&a, &cl), &cd)| PolarPoint {
-            alpha_deg: f64::from(a) / 100.0,
-            cl: f64::from(cl) / 1e4,
-            cd: f64::from(cd) / 1e5,
-        })
-        .collect();
+/// All tables of a family with their rows.
+fn polars(packed: &PackedFamily) -> Vec<(&PackedPolar, Vec<PolarPoint>)> {
+    let (cl, cd) = (packed.cl.unpack(CL_STEPS), packed.cd.unpack(CD_STEPS));
+    let alpha = packed.alpha.unpack(ALPHA_STEPS).into_iter();
+    let mut rows = alpha.zip(cl).zip(cd).map(|((alpha_deg, cl), cd)| PolarPoint { alpha_deg, cl, cd });
+    packed.polars.iter().map(|head| (head, rows.by_ref().take(head.points).collect())).collect()
+}
+
+fn polar(head: &PackedPolar, points: Vec<PolarPoint>) -> Polar {
     Polar {
-        reynolds: Some(packed.reynolds),
-        mach: packed.mach,
-        thickness_ratio: Some(packed.thickness_ratio),
+        reynolds: Some(head.reynolds),
+        mach: head.mach,
+        thickness_ratio: Some(head.thickness_ratio),
         points,
     }
 }
@@ -144,6 +134,20 @@ mod tests {
                 sets.iter().all(|n| library().family(name, *n).is_some()),
                 "{name}'s tables are not usable"
             );
+        }
+    }
+
+    #[test]
+    fn the_shipped_figures_are_those_of_the_folder() {
+        let rows = include_str!("../../../airfoils/raf-6/polars.csv").lines().skip(1);
+        let rows: Vec<Vec<&str>> =
+            rows.map(|l| l.split(',').collect()).filter(|r: &Vec<_>| r[10] == "ok").collect();
+        let packed = &library().entry("raf-6").unwrap().packed;
+        let points: Vec<PolarPoint> = polars(packed).into_iter().flat_map(|(_, points)| points).collect();
+        assert_eq!(points.len(), rows.len());
+        for (point, row) in points.iter().zip(&rows) {
+            let figure = |i: usize| row[i].parse::<f64>().unwrap();
+            assert_eq!([point.alpha_deg, point.cl, point.cd], [figure(4), figure(5), figure(6)]);
         }
     }
 }

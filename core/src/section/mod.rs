@@ -9,6 +9,7 @@ mod library;
 mod local;
 pub mod make;
 pub mod outline;
+mod packed;
 mod polar;
 pub mod solver;
 mod table;

@@ -42,6 +42,8 @@
       if (kept === null) { return embedded || null; }
       return kept || null;
     },
+    // The job this very file was saved with, else null.
+    inFile: function () { return embedded || null; },
     // Call before working a job out. The job goes into storage and into this document, so that the
     // browser's own save command takes it along. Returns whether storage took it.
     before: function (json) {

@@ -93,7 +93,7 @@ mod tests {
 
     #[test]
     fn every_station_stands_inside_and_pixels_run_upward() {
-        let still = drawn(State::started(None).job());
+        let still = drawn(State::started(None, None).job());
         let frame =
             Frame::new(Spans::of(&still, &[Measure::Angle], &Best::default()), Unit::DEGREE, (380.0, 200.0));
         for d in &still {

@@ -13,8 +13,9 @@ use spokeshave::result::PointResult;
 use yew::prelude::*;
 
 use crate::app::RigRef;
+use crate::number::fixed;
 use crate::state::{Action, Measure};
-use crate::units::Quantity;
+use crate::units::{Quantity, Units};
 use crate::view::form::Pick;
 use crate::view::{Seen, use_act};
 use curve::DragCurve;
@@ -57,7 +58,7 @@ pub fn Curves(props: &CurvesProps) -> Html {
                 rings={rings(&props.drawn, ANGLE)} spans={now[0]} {length} selected={state.station} height={196.0} />
             <DragCurve title="Chord and thickness" what={length.name} measures={WOOD} lines={vec![chord(blade), thickness(blade)]}
                 rings={rings(&props.drawn, WOOD)} spans={now[1]} {length} selected={state.station} height={176.0} />
-            <Follow span={state.follow} />
+            <Follow span={state.follow} units={state.units} />
         </div>
     }
 }
@@ -80,6 +81,7 @@ fn rings(drawn: &[DrawnStation], measures: &[Measure]) -> Vec<Vec<[f64; 2]>> {
 #[derive(Properties, PartialEq)]
 struct FollowProps {
     span: usize,
+    units: Units,
 }
 
 #[component]
@@ -90,12 +92,17 @@ fn Follow(props: &FollowProps) -> Html {
         1 => "1 on either side".to_string(),
         n => format!("{n} on either side"),
     };
+    let step_words = {
+        let step_m = props.units.shown(Quantity::Length, pull::step(Measure::Chord, false));
+        let decimals = props.units.decimals(Quantity::Length).max(1);
+        format!("{} {}", fixed(step_m, decimals), props.units.symbol(Quantity::Length))
+    };
     let options: Vec<AttrValue> = (0..=5).map(|n| words(n).into()).collect();
     html! {
         <div class="follow">
             <Pick label="Neighbours that follow" {options} picked={Some(props.span)} onpick={act.on(Action::Follow)} />
             <p class="note">
-                { "Drag a ring, or press ↑ ↓ on it: 0.1° or 0.5 mm, with Shift ten times finer. ← → go to the next ring, Esc puts it back." }
+                { format!("Drag a ring, or press ↑ ↓ on it: 0.1° or {}, with Shift ten times finer. ← → go to the next ring, Esc puts it back.", step_words) }
             </p>
         </div>
     }

@@ -1,12 +1,12 @@
 //! Files: offering one for download, reading one that was picked.
 
-use gloo_file::callbacks::{FileReader, read_as_text};
+use gloo_file::callbacks::FileReader;
 use gloo_file::{Blob, ObjectUrl};
 use spokeshave::job::MOST_BYTES;
 use wasm_bindgen::JsCast;
 use web_sys::{HtmlAnchorElement, HtmlInputElement};
 
-use crate::number::fixed;
+use super::text_file::{read_file, read_text};
 use crate::state::{Action, Notice};
 
 /// Offers a text as a file. Returns whether the browser took it.
@@ -27,30 +27,26 @@ fn try_offer(name: &str, kind: &str, text: &str) -> Option<()> {
     Some(())
 }
 
-/// Reads the file picked in an input and says what to do with it. The reading ends when what is returned is dropped.
+/// Reads a job file that was picked in an input and says what to do with it. The reading ends when what is returned is
+/// dropped.
 pub fn read_picked(input: &HtmlInputElement, act: impl Fn(Action) + 'static) -> Option<FileReader> {
-    let file = gloo_file::File::from(input.files()?.get(0)?);
-    // The same file may be picked again.
-    input.set_value("");
-    let name = file.name();
-    if file.size() > MOST_BYTES as u64 {
-        act(Action::Say(Notice {
-            title: format!("{name} was not opened. The job on the page stays."),
-            lines: vec![format!(
-                "The file has {} bytes; a job has at most {}.",
-                fixed(file.size() as f64, 0),
-                fixed(MOST_BYTES as f64, 0)
-            )],
-        }));
-        return None;
+    read_text(input, MOST_BYTES, move |name, text| act(opened(name, text)))
+}
+
+/// The same for one that was dropped on the page.
+pub fn read_dropped(event: &web_sys::DragEvent, act: impl Fn(Action) + 'static) -> Option<FileReader> {
+    let file = event.data_transfer()?.files()?.get(0)?;
+    read_file(file, MOST_BYTES, move |name, text| act(opened(name, text)))
+}
+
+fn opened(name: String, text: Result<String, String>) -> Action {
+    match text {
+        Ok(text) => Action::Open(name, text),
+        Err(why) => {
+            let title = format!("{name} was not opened. The job on the page stays.");
+            Action::Say(Notice { title, lines: vec![why] })
+        }
     }
-    Some(read_as_text(&file, move |text| match text {
-        Ok(text) => act(Action::Open(name.clone(), text)),
-        Err(why) => act(Action::Say(Notice {
-            title: format!("{name} could not be read. The job on the page stays."),
-            lines: vec![why.to_string()],
-        })),
-    }))
 }
 
 /// A file name for a job, from its title.

@@ -12,13 +12,24 @@ pub fn read_text(
     most_bytes: usize,
     heard: impl Fn(String, Result<String, String>) + 'static,
 ) -> Option<FileReader> {
-    let file = gloo_file::File::from(input.files()?.get(0)?);
+    let file = input.files()?.get(0)?;
     // The same file may be picked again.
     input.set_value("");
+    read_file(file, most_bytes, heard)
+}
+
+/// The same for a file at hand.
+pub fn read_file(
+    file: web_sys::File,
+    most_bytes: usize,
+    heard: impl Fn(String, Result<String, String>) + 'static,
+) -> Option<FileReader> {
+    let file = gloo_file::File::from(file);
     let name = file.name();
     if file.size() > most_bytes as u64 {
-        let (found, most) = (fixed(file.size() as f64, 0), fixed(most_bytes as f64, 0));
-        heard(name, Err(format!("The file has {found} bytes; at most {most} are read.")));
+        let megabytes = |bytes: f64| fixed((bytes / 1e6).ceil(), 0);
+        let (found, most) = (megabytes(file.size() as f64), megabytes(most_bytes as f64));
+        heard(name, Err(format!("The file has {found} MB; at most {most} MB are read.")));
         return None;
     }
     Some(read_as_text(&file, move |text| heard(name.clone(), text.map_err(|e| e.to_string()))))

@@ -1,7 +1,12 @@
 //! What is picked rather than typed, and what is added to or taken out of a job.
 
 use spokeshave::drawn::{measured_by, with_station};
-use spokeshave::job::{AngleReference, FlightPoint, Job, PitchControl, Problem, Rotation, Section, Setting};
+use spokeshave::job::{AngleReference, FlightPoint, Job, PitchControl, Rotation, Section, Setting};
+
+use super::notice::in_words;
+
+/// A blade needs an inner and an outer station.
+pub const FEWEST_STATIONS: usize = 2;
 
 /// A change that is picked from a few.
 #[derive(Clone, Debug, PartialEq)]
@@ -28,6 +33,8 @@ pub enum Choice {
     StallDelay(bool),
     /// Whether the hub takes load off the root.
     HubLoss(bool),
+    /// Amplification exponent at which the tables' boundary layers turn turbulent.
+    Amplification(f64),
     /// A station more, halfway to the next one outward.
     AddStation(usize),
     /// A station less.
@@ -165,6 +172,7 @@ impl Choice {
             Self::Compressibility(_) => "compressibility".into(),
             Self::StallDelay(_) => "stall delay".into(),
             Self::HubLoss(_) => "hub loss".into(),
+            Self::Amplification(_) => "quietness of the air".into(),
             Self::AddStation(i) => format!("add a station after {}", i + 1),
             Self::RemoveStation(i) => format!("remove station {}", i + 1),
             Self::AddPoint(_) => "add a flight point".into(),
@@ -182,7 +190,7 @@ impl Choice {
         if problems.is_empty() {
             return Ok(next);
         }
-        Err(problems.iter().take(3).map(Problem::to_string).collect::<Vec<_>>().join("; "))
+        Err(problems.iter().take(3).map(|p| in_words(job, p)).collect::<Vec<_>>().join(" "))
     }
 
     fn applied(&self, job: &Job, running: Running) -> Result<Job, String> {
@@ -206,9 +214,10 @@ impl Choice {
             Self::Compressibility(on) => method.compressibility = *on,
             Self::StallDelay(on) => method.stall_delay = *on,
             Self::HubLoss(on) => method.hub_loss = *on,
+            Self::Amplification(n) => method.n_crit = *n,
             Self::AddStation(after) => return more_stations(job, *after),
             Self::RemoveStation(i) => {
-                remove(&mut next.propeller.stations, *i, 2, "A blade needs two stations.")?;
+                remove(&mut next.propeller.stations, *i, FEWEST_STATIONS, "A blade needs two stations.")?;
             }
             Self::AddPoint(like) => add_point(&mut next, *like),
             Self::RemovePoint(i) => remove(&mut next.flight_points, *i, 1, "A job needs one flight point.")?,

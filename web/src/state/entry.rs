@@ -106,8 +106,13 @@ pub fn written(job: &Job, units: Units, field: Field, value: f64) -> Result<Job,
 
 /// What is allowed, in the unit shown.
 fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem) -> String {
-    if let Some(span) = radius_span(job, field) {
-        return span_words(units, Quantity::Length, span.0, span.1, "between its neighbours");
+    if let Some((inner, outer)) = radius_span(job, field) {
+        let text = |radius_m| number::with_unit(units, Quantity::Length, Some(radius_m));
+        return format!(
+            "Allowed is between its neighbours, above {} and below {}.",
+            text(inner),
+            text(outer)
+        );
     }
     let own = problem.path == field.path(job);
     match problem.span {
@@ -116,7 +121,7 @@ fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem)
                 Field::Station(i, Measure::Thickness) => chord_m(job, i),
                 _ => 1.0,
             };
-            span_words(units, field.quantity(job), low * scale, high * scale, "")
+            span_words(units, field.quantity(job), low * scale, high * scale, problem.above_lowest)
         }
         _ => elsewhere(units, field, value, problem),
     }
@@ -145,7 +150,7 @@ fn chord_m(job: &Job, i: usize) -> f64 {
     job.propeller.stations.get(i).map_or(1.0, |s| s.chord_m)
 }
 
-fn span_words(units: Units, quantity: Quantity, low: f64, high: f64, more: &str) -> String {
+fn span_words(units: Units, quantity: Quantity, low: f64, high: f64, above_low: bool) -> String {
     let text = |si: f64| {
         let shown = units.shown(quantity, si);
         let decimals = if quantity == Quantity::Count { 0 } else { decimals_of(shown) };
@@ -156,8 +161,10 @@ fn span_words(units: Units, quantity: Quantity, low: f64, high: f64, more: &str)
         "°" => "°".into(),
         unit => format!("\u{a0}{unit}"),
     };
-    let more = if more.is_empty() { String::new() } else { format!(", {more}") };
-    format!("Allowed is {} to {}{unit}{more}.", text(low), text(high))
+    if above_low {
+        return format!("Allowed is above {}, up to {}{unit}.", text(low), text(high));
+    }
+    format!("Allowed is {} to {}{unit}.", text(low), text(high))
 }
 
 /// Enough decimals to tell a bound, none that say nothing.

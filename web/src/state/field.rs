@@ -32,8 +32,6 @@ pub enum Field {
     Point(usize, PointFigure),
     /// Elements of the integrals.
     Elements,
-    /// Amplification at transition.
-    Amplification,
 }
 
 impl Field {
@@ -42,7 +40,7 @@ impl Field {
     pub fn quantity(self, job: &Job) -> Quantity {
         match self {
             Self::Blades | Self::Elements => Quantity::Count,
-            Self::Title | Self::Amplification | Self::Point(_, PointFigure::Name) => Quantity::Number,
+            Self::Title | Self::Point(_, PointFigure::Name) => Quantity::Number,
             Self::GovernedRpm => Quantity::Rpm,
             Self::Turn
             | Self::FineStop
@@ -78,7 +76,6 @@ impl Field {
                 format!("{} of {name}", figure.name())
             }
             Self::Elements => "number of elements".into(),
-            Self::Amplification => "amplification at transition".into(),
         }
     }
 
@@ -97,7 +94,6 @@ impl Field {
             Self::Station(i, measure) => format!("propeller.stations[{i}].{}", measure.key()),
             Self::Point(i, figure) => format!("flight_points[{i}].{}", figure.key(job, i)),
             Self::Elements => "method.elements".into(),
-            Self::Amplification => "method.n_crit".into(),
         }
     }
 
@@ -116,7 +112,6 @@ impl Field {
             (Self::Station(i, measure), _) => drawn.get(i).and_then(|d| measure.of(d)),
             (Self::Point(i, figure), _) => figure.value(job, i),
             (Self::Elements, _) => Some(f64::from(job.method.elements)),
-            (Self::Amplification, _) => Some(job.method.n_crit),
             _ => None,
         }
     }
@@ -168,7 +163,6 @@ impl Field {
             (Self::Station(i, measure), _) => return write_station(job, i, measure, value),
             (Self::Point(i, figure), _) => return figure.write(job, i, value),
             (Self::Elements, _) => job.method.elements = whole(value),
-            (Self::Amplification, _) => job.method.n_crit = value,
             _ => return false,
         }
         true

@@ -94,11 +94,15 @@ impl State {
         }
     }
 
-    /// The state to start with: the job found, else the first example. A job that cannot be read is said.
+    /// The state to start with: the job found, else the first example. A job that cannot be read is said. A page that was
+    /// saved with a job is a file of that job.
     #[must_use]
-    pub fn started(found: Option<&str>) -> Self {
+    pub fn started(found: Option<&str>, in_file: Option<&str>) -> Self {
         match found.map(Job::from_json) {
-            Some(Ok(job)) => Self::new(job),
+            Some(Ok(job)) => {
+                let filed = in_file.and_then(|text| Job::from_json(text).ok()).map(Rc::new);
+                Self { filed, ..Self::new(job) }
+            }
             Some(Err(error)) => {
                 let title = "The job kept here cannot be read. It was put aside; an example is shown.";
                 Self { notice: Some(refused(title, &error)), ..Self::new(example()) }
@@ -185,17 +189,23 @@ impl State {
             Ok(next) => {
                 let name = field.name(job);
                 self.drafts.remove(&field);
-                self.history.step(name, next);
+                self.step(name, next);
             }
             Err(message) => draft.message = Some(message),
         }
+    }
+
+    /// A change that was taken: what was said of the one before no longer holds.
+    fn step(&mut self, name: String, job: Job) {
+        self.history.step(name, job);
+        self.notice = None;
     }
 
     fn choose(&mut self, choice: &Choice, running: Running) {
         match choice.made(self.job(), running) {
             Ok(next) => {
                 let name = choice.name(self.job());
-                self.history.step(name, next);
+                self.step(name, next);
                 self.follow_choice(choice);
             }
             Err(why) => self.notice = Some(Notice { title: "Nothing was changed.".into(), lines: vec![why] }),
@@ -245,7 +255,7 @@ impl State {
         let job = self.job().clone();
         self.history.show(drag.start);
         let name = Field::Station(drag.station, drag.measure).name(&job);
-        self.history.step(name, Rc::unwrap_or_clone(job));
+        self.step(name, Rc::unwrap_or_clone(job));
         self.drafts.clear();
     }
 

@@ -1,6 +1,6 @@
 //! What the page has to say when something did not go as asked.
 
-use spokeshave::job::JobError;
+use spokeshave::job::{Job, JobError, Problem};
 
 /// Something the page has to say.
 #[derive(Clone, Debug, PartialEq)]
@@ -18,4 +18,39 @@ pub(super) fn refused(title: &str, error: &JobError) -> Notice {
         other => vec![other.to_string()],
     };
     Notice { title: title.into(), lines }
+}
+
+/// A problem of the job on the page, in the page's own words.
+pub(super) fn in_words(job: &Job, problem: &Problem) -> String {
+    format!("{}: {}. Allowed is {}.", place(job, &problem.path), problem.found, problem.allowed)
+}
+
+/// Where a path of the job file leads: a station, a flight point by name, or the figure itself.
+fn place(job: &Job, path: &str) -> String {
+    let index = |list: &str| -> Option<usize> {
+        path.strip_prefix(list)?.strip_prefix('[')?.split_once(']')?.0.parse().ok()
+    };
+    if let Some(i) = index("propeller.stations") {
+        return format!("Station {}", i + 1);
+    }
+    if let Some(point) = index("flight_points").and_then(|i| job.flight_points.get(i)) {
+        return point.name.clone();
+    }
+    let last = path.rsplit('.').next().unwrap_or(path).replace('_', " ");
+    let mut letters = last.chars();
+    letters.next().map_or_else(String::new, |first| first.to_uppercase().chain(letters).collect())
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use spokeshave::job::DEMOS;
+
+    #[test]
+    fn a_place_is_said_in_words() {
+        let job = Job::from_json(DEMOS[0].json).unwrap();
+        assert_eq!(place(&job, "propeller.stations[3].chord_m"), "Station 4");
+        assert_eq!(place(&job, "flight_points[2].airspeed_m_s"), job.flight_points[2].name);
+        assert_eq!(place(&job, "propeller.pitch_control"), "Pitch control");
+    }
 }

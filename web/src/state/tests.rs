@@ -6,7 +6,7 @@ use super::*;
 use crate::units::{LengthUnit, Units};
 
 fn start() -> State {
-    State::started(None)
+    State::started(None, None)
 }
 
 fn typed(state: &State, field: Field, text: &str) -> State {
@@ -58,7 +58,7 @@ fn typing_changes_nothing_until_it_is_meant() {
 #[test]
 fn a_wrong_entry_stays_as_typed_says_what_is_allowed_and_changes_nothing() {
     for (field, text, said) in [
-        (CHORD_9, "-3", "Allowed is 0 to 1 520 mm."),
+        (CHORD_9, "-3", "Allowed is above 0, up to 1 520 mm."),
         (ANGLE_8, "95", "Allowed is −90 to 90°."),
         (ANGLE_8, "abc", "Not a number. It was 21.2°."),
         (Field::Blades, "2.5", "A whole number is needed."),
@@ -91,7 +91,7 @@ fn a_radius_has_to_stay_between_its_neighbours() {
 fn what_is_allowed_is_said_in_the_unit_shown() {
     let inches = Units { length: LengthUnit::Inch, ..Units::default() };
     let state = typed(&start().after(Action::Units(inches)), CHORD_9, "99");
-    assert_eq!(state.drafts[&CHORD_9].message.as_deref(), Some("Allowed is 0 to 59.84\u{a0}in."));
+    assert_eq!(state.drafts[&CHORD_9].message.as_deref(), Some("Allowed is above 0, up to 59.84\u{a0}in."));
 }
 
 #[test]
@@ -235,7 +235,7 @@ fn opening_a_job_can_be_undone() {
 
 #[test]
 fn a_job_kept_that_cannot_be_read_is_said() {
-    assert!(State::started(Some("{\"spokeshave\": 9}")).notice.is_some());
+    assert!(State::started(Some("{\"spokeshave\": 9}"), None).notice.is_some());
 }
 
 #[test]

@@ -192,8 +192,15 @@ pub fn typed_unit_si(quantity: Quantity, suffix: &str) -> Option<f64> {
             ("in", length_m(LengthUnit::Inch)),
             ("\"", length_m(LengthUnit::Inch)),
             ("″", length_m(LengthUnit::Inch)),
+            ("inch", length_m(LengthUnit::Inch)),
+            ("ft", height_m(HeightUnit::Foot)),
+            ("'", height_m(HeightUnit::Foot)),
+            ("′", height_m(HeightUnit::Foot)),
         ]),
-        Quantity::Height => of(&[("m", 1.0), ("ft", height_m(HeightUnit::Foot))]),
+        Quantity::Height => {
+            let foot = height_m(HeightUnit::Foot);
+            of(&[("m", 1.0), ("km", 1000.0), ("ft", foot), ("feet", foot), ("'", foot), ("′", foot)])
+        }
         Quantity::Speed => SpeedUnit::ALL.iter().find(|u| u.symbol() == suffix).map(|&u| speed_m_s(u)),
         Quantity::Power => PowerUnit::ALL.iter().find(|u| u.symbol() == suffix).map(|&u| power_w(u)),
         Quantity::Angle => of(&[("°", 1.0), ("deg", 1.0)]),

@@ -2,7 +2,7 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::{FlightPoint, Setting};
+use spokeshave::job::{Aircraft, FlightPoint, Job, Setting};
 use spokeshave::result::{PointResult, State as Answer};
 use wasm_bindgen::JsCast;
 use web_sys::{HtmlElement, js_sys};
@@ -56,9 +56,11 @@ pub fn Chips(props: &ChipsProps) -> Html {
 /// The airspeed given, else the one that came out, else that there is none.
 fn speed_words(units: Units, point: &FlightPoint, result: Option<&Rc<Option<PointResult>>>) -> String {
     let result = result.and_then(|r| r.as_ref().as_ref());
+    if result.is_some_and(|r| r.state != Answer::Ok) {
+        return "no answer".into();
+    }
     match point.airspeed_m_s.or(result.and_then(|r| r.airspeed_m_s)) {
         Some(v) => with_unit(units, Quantity::Speed, Some(v)),
-        None if result.is_some() => "no answer".into(),
         None => String::new(),
     }
 }
@@ -75,18 +77,25 @@ fn focus_sibling(event: &KeyboardEvent, to: usize) {
 
 /// The flight point in a sentence: its setting, height and what comes of it, or why there is no answer.
 #[must_use]
-pub fn sentence(units: Units, point: &FlightPoint, result: Option<&PointResult>) -> String {
+pub fn sentence(units: Units, job: &Job, point: &FlightPoint, result: Option<&PointResult>) -> String {
+    let hovers = matches!(job.aircraft, Some(Aircraft::Multirotor(_)));
     match result {
         Some(r) if r.state != Answer::Ok => r.state.sentence().to_string(),
-        _ => format!("{}{}, {}", setting_words(units, point), air_words(units, point), rpm_words(result)),
+        _ => format!(
+            "{}{}, {}",
+            setting_words(units, point, hovers),
+            air_words(units, point),
+            rpm_words(result)
+        ),
     }
 }
 
-fn setting_words(units: Units, point: &FlightPoint) -> String {
+fn setting_words(units: Units, point: &FlightPoint, hovers: bool) -> String {
     match point.setting {
         Setting::Rpm { .. } => "Rpm as set".into(),
         Setting::Power { power_w } => format!("At {}", with_unit(units, Quantity::Power, Some(power_w))),
         Setting::FullThrottle {} => "Full throttle".into(),
+        Setting::Level {} if hovers => "Hover".into(),
         Setting::Level {} => "Level".into(),
         Setting::Throttle { fraction } => {
             format!("{} throttle", with_unit(units, Quantity::Share, Some(fraction)))
@@ -115,14 +124,14 @@ fn rpm_words(result: Option<&PointResult>) -> String {
 #[cfg(test)]
 mod tests {
     use super::*;
-    use spokeshave::job::{DEMOS, Job};
+    use spokeshave::job::DEMOS;
     use spokeshave::rig::Rig;
 
     #[test]
     fn a_point_is_said_in_a_sentence() {
         let job = Job::from_json(DEMOS[0].json).unwrap();
         let result = Rig::new(&job).unwrap().point(2);
-        let said = sentence(Units::default(), &job.flight_points[2], result.as_ref());
+        let said = sentence(Units::default(), &job, &job.flight_points[2], result.as_ref());
         let said = said.replace(['\u{a0}', '\u{202f}'], " ");
         assert!(said.starts_with("Level at 600 m, 2 ") && said.ends_with(" rpm"), "{said}");
     }

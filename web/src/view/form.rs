@@ -160,6 +160,9 @@ pub struct PickProps {
     pub picked: Option<usize>,
     /// Says which was picked.
     pub onpick: Callback<usize>,
+    /// Which cannot be picked now.
+    #[prop_or_default]
+    pub off: Vec<bool>,
     /// Without a visible label.
     #[prop_or_default]
     pub bare: bool,
@@ -176,7 +179,8 @@ pub fn Pick(props: &PickProps) -> Html {
         select.set_selected_index(picked.and_then(|i| i32::try_from(i).ok()).unwrap_or(-1));
     });
     let options = props.options.iter().enumerate().map(|(i, text)| {
-        html! { <option key={i} selected={props.picked == Some(i)}>{ text }</option> }
+        let off = props.off.get(i).copied().unwrap_or(false);
+        html! { <option key={i} selected={props.picked == Some(i)} disabled={off}>{ text }</option> }
     });
     let list = html! { <select aria-label={props.label.clone()} {onchange}>{ for options }</select> };
     if props.bare {

@@ -6,8 +6,8 @@ use spokeshave::result::{Note, PointResult, State};
 use spokeshave::section::Family;
 use yew::prelude::*;
 
-use super::form::{Labelled, Shown, Switch};
-use super::{Seen, use_act};
+use super::form::{Labelled, Pick, Shown, Switch};
+use super::{Act, Seen, use_act};
 use crate::app::RigRef;
 use crate::number::{fixed, significant};
 use crate::state::{Action, Choice, Field, Running};
@@ -67,9 +67,23 @@ fn Switches(props: &SwitchesProps) -> Html {
             { switch("Rotation delays stall inboard", method.stall_delay, Choice::StallDelay) }
             { switch("The hub takes load off the root", method.hub_loss, Choice::HubLoss) }
             <Labelled shown={Shown::of(state, &[], Field::Elements)} label="Elements of a blade" />
-            <Labelled shown={Shown::of(state, &[], Field::Amplification)} label="Amplification at transition (9 quiet air, 4 disturbed)" />
+            { quietness(&act, method.n_crit) }
         </div>
     }
+}
+
+/// Which set of tables: boundary layers turn turbulent later in quiet air. A job file may ask for another n.
+fn quietness(act: &Act, n_crit: f64) -> Html {
+    const SETS: [f64; 2] = [9.0, 4.0];
+    let mut options: Vec<AttrValue> = vec!["quiet (n = 9)".into(), "disturbed (n = 4)".into()];
+    let picked = SETS.iter().position(|n| *n == n_crit);
+    if picked.is_none() {
+        options.push(format!("n = {n_crit}: the nearest tables").into());
+    }
+    let onpick = act.on(move |i: usize| {
+        Action::Choose(Choice::Amplification(SETS.get(i).copied().unwrap_or(n_crit)), Running::default())
+    });
+    html! { <Pick label="Air the section tables are for" {options} picked={picked.or(Some(2))} {onpick} /> }
 }
 
 fn family(family: &Family) -> Html {

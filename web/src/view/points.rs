@@ -56,14 +56,14 @@ fn PointsHead(props: &PointsHeadProps) -> Html {
     let units = props.units;
     let columns = [
         ("Height", units.symbol(Quantity::Height)),
-        ("Off standard", "K"),
+        ("Warmer than standard", "K"),
         ("Airspeed", units.symbol(Quantity::Speed)),
         ("Set by", ""),
         ("Setting", ""),
         ("Rpm", ""),
         ("Thrust", units.symbol(Quantity::Force)),
         ("Power", units.symbol(Quantity::Power)),
-        ("Of full", "%"),
+        ("Of full power", "%"),
         ("Climb", units.symbol(Quantity::Climb)),
         ("Efficiency", ""),
         ("Advance ratio", ""),

@@ -81,7 +81,7 @@ fn Chosen(props: &PageProps) -> Html {
     html! {
         <>
             <Chips state={state.part(same_chips)} points={props.later.points.clone()} />
-            <p class="point-note">{ point.map(|p| sentence(state.units, p, (*props.now.point).as_ref())) }</p>
+            <p class="point-note">{ point.map(|p| sentence(state.units, state.job(), p, (*props.now.point).as_ref())) }</p>
         </>
     }
 }
@@ -116,7 +116,7 @@ pub fn MapReading(props: &PageProps) -> Html {
         }
         _ => {
             let words = if answered {
-                html! {}
+                html! { <p class="no-answer">{ "Working out the map…" }</p> }
             } else {
                 no_answer("map")
             };

@@ -32,6 +32,7 @@ const EXAMPLES: &str = "Examples:
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
   spokeshave schema                                the JSON Schema of the job file
   spokeshave sections                              the section families and where their tables come from
+  spokeshave sections clark-y --thickness 12       best angles of one by Reynolds number
   spokeshave polar OUTLINE.dat --re 1e5,3e5        lift and drag of an outline of your own
   spokeshave import TABLE.csv --name my-section    a measured table, for a job file
 
@@ -51,7 +52,7 @@ enum Command {
     Polar(polar::Args),
     /// Read a measured table and print it as a section for a job file
     Import(import::Args),
-    /// Compute the tables of the section families anew
+    /// For maintainers: compute the tables of the section families anew
     Airfoils(airfoils::Args),
     /// Print an invented job file to start from
     Demo(input::DemoArgs),

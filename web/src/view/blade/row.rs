@@ -6,7 +6,7 @@ use spokeshave::drawn::DrawnStation;
 use yew::prelude::*;
 
 use super::head::point_class;
-use super::section_names;
+use super::section_options;
 use super::table::Columns;
 use crate::chart::departure::style;
 use crate::number::signed_or_none;
@@ -130,12 +130,14 @@ struct SectionPickProps {
 fn SectionPick(props: &SectionPickProps) -> Html {
     let act = use_act();
     let (i, job) = (props.index, props.state.job());
-    let names = section_names(job);
-    let picked = job.propeller.stations.get(i).and_then(|s| names.iter().position(|n| *n == s.section));
-    let options: Vec<AttrValue> = names.iter().cloned().map(AttrValue::from).collect();
+    let sections = section_options(job);
+    let picked =
+        job.propeller.stations.get(i).and_then(|s| sections.iter().position(|o| o.name == s.section));
+    let options: Vec<AttrValue> = sections.iter().map(|o| o.words.clone()).collect();
+    let off: Vec<bool> = sections.iter().map(|o| o.off).collect();
     let onpick = act.on(move |k: usize| {
-        let name = names.get(k).cloned().unwrap_or_default();
+        let name = sections.get(k).map(|o| o.name.clone()).unwrap_or_default();
         Action::Choose(Choice::Section(i, name), Running::default())
     });
-    html! { <Pick label={format!("Section at station {}", i + 1)} {options} {picked} {onpick} bare=true /> }
+    html! { <Pick label={format!("Section at station {}", i + 1)} {options} {off} {picked} {onpick} bare=true /> }
 }

@@ -3,7 +3,7 @@
 use spokeshave::job::{AngleReference, PitchControl, Rotation};
 use yew::prelude::*;
 
-use super::{one_section, section_names};
+use super::{one_section, section_options};
 use crate::state::{Action, Choice, ControlKind, Field, Running};
 use crate::view::form::{Labelled, Pick, Shown};
 use crate::view::{Act, Seen, use_act};
@@ -54,18 +54,19 @@ fn reference(act: &Act, state: &Seen) -> Html {
 }
 
 fn section(act: &Act, state: &Seen) -> Html {
-    let names = section_names(state.job());
+    let sections = section_options(state.job());
     let one = one_section(state.job());
-    let mut options: Vec<AttrValue> = names.iter().cloned().map(AttrValue::from).collect();
+    let mut options: Vec<AttrValue> = sections.iter().map(|o| o.words.clone()).collect();
+    let off: Vec<bool> = sections.iter().map(|o| o.off).collect();
     if one.is_none() {
         options.push("by station".into());
     }
-    let picked = one.map_or(Some(names.len()), |one| names.iter().position(|n| n == one));
-    let onpick = act.on(move |i: usize| match names.get(i) {
-        Some(name) => Action::Choose(Choice::SectionOfAll(name.clone()), Running::default()),
+    let picked = one.map_or(Some(sections.len()), |one| sections.iter().position(|o| o.name == one));
+    let onpick = act.on(move |i: usize| match sections.get(i) {
+        Some(o) => Action::Choose(Choice::SectionOfAll(o.name.clone()), Running::default()),
         None => Action::Dismiss,
     });
-    html! { <Pick label="Section" {options} {picked} {onpick} /> }
+    html! { <Pick label="Section" {options} {off} {picked} {onpick} /> }
 }
 
 fn control(act: &Act, state: &Seen) -> Html {

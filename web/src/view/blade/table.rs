@@ -9,11 +9,12 @@ use yew::prelude::*;
 use super::head::TableHead;
 use super::one_section;
 use super::row::StationRow;
+use crate::state::choice::FEWEST_STATIONS;
 use crate::state::{Action, Choice, Running};
 use crate::view::{Seen, use_act};
 
 /// Most flight points that get a column.
-const MOST_COLUMNS: usize = 5;
+const MOST_COLUMNS: usize = 4;
 
 /// Properties of [`StationTable`].
 #[derive(Properties, PartialEq)]
@@ -115,7 +116,7 @@ struct RowButtonsProps {
 #[component]
 fn RowButtons(props: &RowButtonsProps) -> Html {
     let act = use_act();
-    let i = props.state.station;
+    let (i, count) = (props.state.station, props.state.job().propeller.stations.len());
     let choose =
         |choice: Choice| act.on(move |_: MouseEvent| Action::Choose(choice.clone(), Running::default()));
     html! {
@@ -123,7 +124,7 @@ fn RowButtons(props: &RowButtonsProps) -> Html {
             <button type="button" class="act" onclick={choose(Choice::AddStation(i))}>
                 { format!("Add a station outward of {}", i + 1) }
             </button>
-            <button type="button" class="act" onclick={choose(Choice::RemoveStation(i))}>
+            <button type="button" class="act" disabled={count <= FEWEST_STATIONS} onclick={choose(Choice::RemoveStation(i))}>
                 { format!("Remove station {}", i + 1) }
             </button>
         </p>
@@ -137,6 +138,6 @@ mod tests {
     #[test]
     fn the_point_selected_always_has_a_column() {
         assert_eq!(shown_points(3, 1), [0, 1, 2]);
-        assert_eq!(shown_points(9, 7), [0, 1, 2, 3, 7]);
+        assert_eq!(shown_points(9, 7), [0, 1, 2, 7]);
     }
 }
