@@ -103,6 +103,14 @@ impl Shaft {
         }
     }
 
+    /// Full-throttle shaft power at a propeller rpm, W; `None` outside the curve, where nothing is known, and where there is none.
+    #[must_use]
+    pub fn available_w(&self, rpm: f64, air: &Air) -> Option<f64> {
+        let (low, high) = self.rpm_range();
+        let within = (low..=high * (1.0 + 1e-9)).contains(&rpm);
+        within.then(|| self.power_w(rpm, air, 1.0)).filter(|power| *power > 0.0)
+    }
+
     /// Fuel mass flow at a shaft power, kg/s, where the consumption is given.
     #[must_use]
     pub fn fuel_kg_s(&self, power_w: f64) -> Option<f64> {
@@ -110,6 +118,23 @@ impl Shaft {
             Self::Piston(p) => p.data.bsfc_kg_per_kwh.map(|b| b * power_w.max(0.0) / 3.6e6),
             Self::Electric(_) => None,
         }
+    }
+
+    /// How long the fuel, or the usable charge, feeds all engines at a propeller rpm and shaft power of each, s. Fuel and battery are the
+    /// aircraft's. `None` where they are not given, the load cannot be met or nothing is drawn.
+    #[must_use]
+    pub fn endurance_s(&self, rpm: f64, power_w: f64, engines: f64) -> Option<f64> {
+        let (store, drain) = match self {
+            Self::Piston(p) => (p.data.fuel_kg?, self.fuel_kg_s(power_w)?),
+            Self::Electric(e) => {
+                let battery = &e.data.battery;
+                (
+                    3600.0 * battery.capacity_ah * battery.usable_fraction,
+                    e.electrics(rpm, power_w)?.battery_current_a,
+                )
+            }
+        };
+        (drain > 0.0).then(|| store / (drain * engines))
     }
 
     /// The electric side at a propeller rpm and shaft power; `None` for a piston engine or where no duty up to 1 gives it.

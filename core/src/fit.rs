@@ -16,13 +16,19 @@ use root::Missed;
 use settle::{Demand, Free, Governed, Met, STEPS};
 use trail::Trail;
 
+mod envelope;
+mod full;
+mod held;
 mod line;
+mod marks;
 mod meeting;
 mod root;
 mod settle;
 mod top_speed;
 mod trail;
 
+pub use envelope::envelope;
+pub use held::held;
 pub use line::line;
 pub use meeting::meeting;
 

@@ -29,6 +29,7 @@ pub fn point(rotor: &Rotor, point: &FlightPoint, at: &Condition) -> PointResult 
         meeting: Meeting::default(),
         notes: point_notes(&stations, &loads),
         stations,
+        held: None,
     }
 }
 
@@ -46,6 +47,7 @@ pub fn unanswered(point: &FlightPoint, air: &Air, state: State, turn_rad: f64) -
         meeting: Meeting::default(),
         stations: Vec::new(),
         notes: Vec::new(),
+        held: None,
     }
 }
 

@@ -2,6 +2,10 @@
 
 use serde::Serialize;
 
+mod fit;
+
+pub use fit::{Envelope, EnvelopePoint, FullThrottle, HeldAtLimit, Level, Mark, Marks, TIP_MACHS, TipMach};
+
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]
 pub struct Analysis {
@@ -89,6 +93,8 @@ pub enum Note {
     NoBalance,
     /// At hub or tip, where the load is nothing by definition.
     NoLoadAtEnd,
+    /// Full throttle would pass the limit rpm; [`PointResult::held`] is throttled back to it.
+    HeldAtLimitRpm,
 }
 
 impl Note {
@@ -104,6 +110,7 @@ impl Note {
             Self::Windmilling => "driven by the air",
             Self::NoBalance => "no balance found, no load counted",
             Self::NoLoadAtEnd => "at the end of the blade, no load",
+            Self::HeldAtLimitRpm => "throttled back to hold the limit rpm",
         }
     }
 }
@@ -133,6 +140,9 @@ pub struct PointResult {
     pub stations: Vec<StationResult>,
     /// What holds somewhere on the blade.
     pub notes: Vec<Note>,
+    /// At full throttle with state `over-limit-rpm`: the answer throttled back to the limit rpm.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub held: Option<Box<HeldAtLimit>>,
 }
 
 /// Figures of the whole propeller (one propeller).

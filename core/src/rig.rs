@@ -6,7 +6,7 @@ use crate::air::{Air, AirError};
 use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
 use crate::job::{FlightPoint, Job, PitchControl};
-use crate::result::{Analysis, PointResult, PropellerFigures, SectionPoint};
+use crate::result::{Analysis, Note, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
 use crate::{fit, report};
 
@@ -74,7 +74,12 @@ impl Rig {
                 result.meeting = fit::meeting(self, &at, &result.figures);
                 result
             }
-            Err(state) => report::unanswered(point, &air, state, self.turn_rad()),
+            Err(state) => {
+                let mut result = report::unanswered(point, &air, state, self.turn_rad());
+                result.held = fit::held(self, point, air, state).map(Box::new);
+                result.notes.extend(result.held.as_ref().map(|_| Note::HeldAtLimitRpm));
+                result
+            }
         })
     }
 

@@ -20,10 +20,7 @@ fn add_engine(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
     let (Some(shaft), Some(power)) = (&rig.shaft, figures.power_w) else { return };
     let rpm = rpm_of(at);
     m.engine_rpm = Some(rpm * shaft.gear_ratio());
-    let (low, high) = shaft.rpm_range();
-    // Outside the curve nothing is known: there is no extrapolation.
-    let available = (low..=high * (1.0 + 1e-9)).contains(&rpm).then(|| shaft.power_w(rpm, &at.air, 1.0));
-    m.available_power_w = available.filter(|p| *p > 0.0);
+    m.available_power_w = shaft.available_w(rpm, &at.air);
     m.power_share = m.available_power_w.map(|a| power / a);
     let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
     m.fuel_kg_per_h = shaft.fuel_kg_s(power).map(|f| 3600.0 * f * engines);

@@ -3,8 +3,8 @@
 use std::cell::RefCell;
 
 use super::Solver;
+use super::full::Full;
 use super::root::{Search, Wanted};
-use super::settle::Met;
 use super::trail::Trail;
 use crate::aircraft::{speeds, thrust_asked_n};
 use crate::job::Aircraft;
@@ -28,11 +28,23 @@ const MET_SHARE: f64 = 1e-3;
 /// # Errors
 /// No aircraft or engine, or thrust below drag at every speed.
 pub(super) fn condition(rig: &Rig, at: &Condition) -> Result<Condition, State> {
-    let exact = Chase::new(Solver { rig, rough: false }, at)?;
-    let rough = Chase::new(Solver { rig, rough: true }, at)?;
+    top(rig, at, false).map(|full| full.condition)
+}
+
+/// The same or, where the engine's limit rpm comes first, the fastest level flight throttled back to it.
+pub(super) fn fastest(rig: &Rig, at: &Condition) -> Result<Full, State> {
+    match top(rig, at, false) {
+        Err(State::OverLimitRpm) => top(rig, at, true),
+        answer => answer,
+    }
+}
+
+fn top(rig: &Rig, at: &Condition, hold: bool) -> Result<Full, State> {
+    let exact = Chase::new(Solver { rig, rough: false }, at, hold)?;
+    let rough = Chase::new(Solver { rig, rough: true }, at, hold)?;
     let found = rough.step_by_step().ok().and_then(|(low, high, _)| exact.met(&rough, low, high));
-    if let Some(condition) = found {
-        return Ok(condition);
+    if let Some(full) = found {
+        return Ok(full);
     }
     // Where few elements do not lead there, all of them look again.
     let (low, high, limit) = exact.step_by_step()?;
@@ -43,21 +55,24 @@ struct Chase<'r> {
     solver: Solver<'r>,
     aircraft: &'r Aircraft,
     at: Condition,
+    /// Whether the throttle may be drawn back to hold the limit rpm.
+    hold: bool,
 }
 
 impl<'r> Chase<'r> {
-    fn new(solver: Solver<'r>, at: &Condition) -> Result<Self, State> {
+    fn new(solver: Solver<'r>, at: &Condition, hold: bool) -> Result<Self, State> {
         let aircraft = solver.rig.job.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
         solver.rig.shaft.as_ref().ok_or(State::NeedsEngine)?;
-        Ok(Self { solver, aircraft, at: *at })
+        Ok(Self { solver, aircraft, at: *at, hold })
     }
 
-    fn full(&self, airspeed_m_s: f64, trail: &Trail) -> Result<Met, State> {
-        self.solver.throttle(&Condition { airspeed_m_s, ..self.at }, 1.0, trail)
+    fn full(&self, airspeed_m_s: f64, trail: &mut Trail) -> Result<Full, State> {
+        let full = self.solver.full(&Condition { airspeed_m_s, ..self.at }, trail)?;
+        if full.held && !self.hold { Err(State::OverLimitRpm) } else { Ok(full) }
     }
 
     /// Thrust above what is asked.
-    fn spare_n(&self, met: &Met) -> Option<f64> {
+    fn spare_n(&self, met: &Full) -> Option<f64> {
         let asked = thrust_asked_n(self.aircraft, &self.at.air, met.condition.airspeed_m_s)?;
         Some(met.loads.thrust_n - asked)
     }
@@ -75,15 +90,12 @@ impl<'r> Chase<'r> {
         let (mut trail, mut last, mut limit) = (Trail::default(), None, State::OverLimitRpm);
         let mut v = self.first_m_s();
         while v < fastest {
-            match self.full(v, &trail) {
-                Ok(met) => {
-                    trail.push(&met);
-                    match self.spare_n(&met) {
-                        Some(s) if s >= 0.0 => last = Some(v),
-                        _ if last.is_some() => break,
-                        _ => limit = State::OutOfReach,
-                    }
-                }
+            match self.full(v, &mut trail) {
+                Ok(met) => match self.spare_n(&met) {
+                    Some(s) if s >= 0.0 => last = Some(v),
+                    _ if last.is_some() => break,
+                    _ => limit = State::OutOfReach,
+                },
                 // Past the engine's range before thrust falls to drag: that is what stops the aircraft.
                 Err(state) => {
                     limit = state;
@@ -97,16 +109,13 @@ impl<'r> Chase<'r> {
 
     /// How much thrust is short at a speed; where there is no full-throttle condition, some is.
     fn short_n(&self, airspeed_m_s: f64, trail: &RefCell<Trail>) -> f64 {
-        let met = self.full(airspeed_m_s, &trail.borrow()).ok();
-        let spare = met.and_then(|met| {
-            trail.borrow_mut().push(&met);
-            self.spare_n(&met)
-        });
+        let full = self.full(airspeed_m_s, &mut trail.borrow_mut()).ok();
+        let spare = full.and_then(|full| self.spare_n(&full));
         spare.map_or(1.0, |spare| -spare)
     }
 
     /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends first.
-    fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Condition> {
+    fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Full> {
         let (trail, rough_trail) = (RefCell::default(), RefCell::default());
         let search = Search {
             range: low..=high,
@@ -116,8 +125,8 @@ impl<'r> Chase<'r> {
             exact: &|v| self.short_n(v, &trail),
         };
         let top = search.root().ok()?.0.x;
-        let met = self.full(top, &trail.borrow()).ok()?;
-        let spare = self.spare_n(&met)?.abs();
-        (spare < MET_SHARE * met.loads.thrust_n).then_some(met.condition)
+        let full = self.full(top, &mut trail.borrow_mut()).ok()?;
+        let spare = self.spare_n(&full)?.abs();
+        (spare < MET_SHARE * full.loads.thrust_n).then_some(full)
     }
 }

@@ -1,0 +1,54 @@
+//! Full throttle, or throttled back to the limit rpm where full throttle would pass it.
+
+use super::settle::Met;
+use super::trail::Trail;
+use super::{Solver, highest_rpm, power_w};
+use crate::job::PitchControl;
+use crate::result::State;
+use crate::rig::rotation_rad_s;
+use crate::rotor::{Condition, Loads};
+
+/// What full throttle comes to.
+#[derive(Clone, Copy, Debug)]
+pub(super) struct Full {
+    pub(super) condition: Condition,
+    pub(super) loads: Loads,
+    /// Whether the throttle is drawn back to hold the limit rpm.
+    pub(super) held: bool,
+}
+
+impl From<Met> for Full {
+    fn from(met: Met) -> Self {
+        Self { condition: met.condition, loads: met.loads, held: false }
+    }
+}
+
+impl Solver<'_> {
+    /// Full throttle or, where it would pass the limit rpm or the end of the engine's curve, that rpm; leads the trail on.
+    pub(super) fn full(&self, at: &Condition, trail: &mut Trail) -> Result<Full, State> {
+        match self.throttle(at, 1.0, trail) {
+            Ok(met) => {
+                trail.push(&met);
+                Ok(met.into())
+            }
+            Err(State::OverLimitRpm) => self.held_at_limit(at).ok_or(State::OverLimitRpm),
+            Err(state) => Err(state),
+        }
+    }
+
+    /// The limit rpm, throttled back; `None` where the air alone drives the propeller there, which no throttle holds.
+    pub(super) fn held_at_limit(&self, at: &Condition) -> Option<Full> {
+        let shaft = self.rig.shaft.as_ref()?;
+        let turn_rad = match self.rig.job.propeller.pitch_control {
+            PitchControl::ConstantSpeed { turn_max_deg, .. } => turn_max_deg.to_radians(),
+            PitchControl::Fixed {} | PitchControl::GroundAdjustable { .. } => at.turn_rad,
+        };
+        let condition = Condition { rotation_rad_s: rotation_rad_s(highest_rpm(shaft)), turn_rad, ..*at };
+        let loads = self.loads(&condition);
+        (power_w(&loads, &condition) > 0.0).then_some(Full { condition, loads, held: true })
+    }
+
+    pub(super) fn loads(&self, at: &Condition) -> Loads {
+        if self.rough { self.rig.rotor.rough_loads(at) } else { self.rig.rotor.loads(at) }
+    }
+}

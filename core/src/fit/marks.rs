@@ -1,0 +1,89 @@
+//! Places of the speed range that decide: the tops of curves by the parabola through three points, and where limits are passed.
+
+use super::Solver;
+use super::envelope::{full_throttle, level};
+use super::full::Full;
+use super::trail::Trail;
+use crate::result::{EnvelopePoint, FullThrottle, Level, Mark, Marks, State, TIP_MACHS, TipMach};
+use crate::rig::Rig;
+use crate::rotor::Condition;
+
+/// The marks of an envelope's points; `top` is its top speed.
+pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Option<Full>) -> Marks {
+    let solver = Solver::new(rig);
+    let here = |airspeed_m_s: f64| Condition { airspeed_m_s, ..*at };
+    let full = |v: f64| {
+        let full = solver.full(&here(v), &mut Trail::default()).ok()?;
+        Some(full_throttle(rig, &full, Vec::new()))
+    };
+    let flight = |v: f64| {
+        let met = solver.level(&here(v), &Trail::default()).ok()?;
+        Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
+    };
+    let climb = |of: fn(&FullThrottle) -> Option<f64>| {
+        let v = summit(points, |p| p.full.as_ref().and_then(of))?;
+        let f = full(v)?;
+        of(&f).map(|value| Mark { airspeed_m_s: v, rpm: f.rpm, value, held_at_limit: f.held_at_limit })
+    };
+    let cruise = |of: fn(&Level) -> Option<f64>| {
+        let v = summit(points, |p| p.level.as_ref().and_then(of))?;
+        let l = flight(v)?;
+        of(&l).map(|value| Mark { airspeed_m_s: v, rpm: l.rpm, value, held_at_limit: false })
+    };
+    Marks {
+        best_rate_of_climb: climb(|f| f.rate_of_climb_m_s),
+        best_angle_of_climb: climb(|f| f.climb_angle_deg),
+        top_speed: top.map(|f| {
+            let told = full_throttle(rig, &f, Vec::new());
+            let airspeed_m_s = f.condition.airspeed_m_s;
+            Mark { airspeed_m_s, rpm: told.rpm, value: told.thrust_n, held_at_limit: f.held }
+        }),
+        best_range: cruise(|l| l.range_m),
+        best_endurance: cruise(|l| l.endurance_s),
+        limit_rpm_from_m_s: passed(points, |f| if f.held_at_limit { 1.0 } else { -1.0 }),
+        tip_mach_from: TIP_MACHS
+            .iter()
+            .filter_map(|&mach| {
+                let airspeed_m_s = passed(points, |f| f.tip_mach - mach)?;
+                Some(TipMach { tip_mach: mach, airspeed_m_s })
+            })
+            .collect(),
+    }
+}
+
+/// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or the highest point where it is at
+/// an end. Only speeds above rest count.
+fn summit(points: &[EnvelopePoint], of: impl Fn(&EnvelopePoint) -> Option<f64>) -> Option<f64> {
+    let values: Vec<(f64, f64)> = points
+        .iter()
+        .filter(|p| p.airspeed_m_s > 0.0)
+        .filter_map(|p| of(p).map(|value| (p.airspeed_m_s, value)))
+        .collect();
+    let top = (0..values.len()).max_by(|&a, &b| values[a].1.total_cmp(&values[b].1))?;
+    let at = |i: usize| values.get(i).copied();
+    let (Some(a), Some(b), Some(c)) = (top.checked_sub(1).and_then(at), at(top), at(top + 1)) else {
+        return at(top).map(|p| p.0);
+    };
+    Some(vertex(a, b, c))
+}
+
+/// The top of the parabola through three points of which the middle one is highest.
+pub(super) fn vertex(a: (f64, f64), b: (f64, f64), c: (f64, f64)) -> f64 {
+    let (left, right) = ((b.1 - a.1) / (b.0 - a.0), (c.1 - b.1) / (c.0 - b.0));
+    let bend = (right - left) / (c.0 - a.0);
+    if bend < 0.0 { (0.5 * (a.0 + b.0) - 0.5 * left / bend).clamp(a.0, c.0) } else { b.0 }
+}
+
+/// The speed at which a value of full throttle rises through zero, on the line between two points.
+fn passed(points: &[EnvelopePoint], of: impl Fn(&FullThrottle) -> f64) -> Option<f64> {
+    let values: Vec<(f64, f64)> =
+        points.iter().filter_map(|p| p.full.as_ref().map(|f| (p.airspeed_m_s, of(f)))).collect();
+    let first = values.first()?;
+    if first.1 >= 0.0 {
+        return Some(first.0);
+    }
+    values
+        .windows(2)
+        .find(|w| w[0].1 < 0.0 && w[1].1 >= 0.0)
+        .map(|w| w[0].0 - w[0].1 * (w[1].0 - w[0].0) / (w[1].1 - w[0].1))
+}

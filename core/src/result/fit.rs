@@ -1,0 +1,161 @@
+//! Results of the fit over the whole speed range, as plain data.
+
+use serde::Serialize;
+
+use super::{Figures, Meeting, State};
+use crate::aircraft::Speeds;
+
+/// What a flight point's setting would give if the throttle were drawn back to hold the engine at its limit rpm (or at the end of its
+/// curve), where full throttle would pass it.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct HeldAtLimit {
+    /// True airspeed, m/s; for top speed the fastest level flight so held.
+    pub airspeed_m_s: f64,
+    /// Propeller rpm, that of the limit.
+    pub rpm: f64,
+    /// Angle the blades are turned in the hub, degrees.
+    pub turn_deg: f64,
+    /// Figures of the propeller.
+    #[serde(flatten)]
+    pub figures: Figures,
+    /// What engine and aircraft make of it.
+    #[serde(flatten)]
+    pub meeting: Meeting,
+}
+
+/// The fit over the speed range at one flight point's air.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Envelope {
+    /// The flight point whose air it is.
+    pub flight_point: String,
+    /// Pressure altitude, m.
+    pub altitude_m: f64,
+    /// Temperature offset from the standard atmosphere, K.
+    pub isa_offset_k: f64,
+    /// Air density, kg/m³.
+    pub density_kg_m3: f64,
+    /// Speeds that follow from the aeroplane's drag polar alone.
+    pub speeds: Option<Speeds>,
+    /// Radius fractions at which departures are given.
+    pub radius_fractions: Vec<f64>,
+    /// The speed range at equal steps from rest.
+    pub points: Vec<EnvelopePoint>,
+    /// Full throttle at rest: what the ground run shows.
+    pub standing: Option<FullThrottle>,
+    /// The places that decide.
+    pub marks: Marks,
+}
+
+/// One speed of an envelope.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct EnvelopePoint {
+    /// True airspeed, m/s.
+    pub airspeed_m_s: f64,
+    /// Drag of the aeroplane in level flight, or the weight of a multirotor, N.
+    pub asked_n: Option<f64>,
+    /// Full throttle; `None` where there is no answer.
+    pub full: Option<FullThrottle>,
+    /// Why full throttle has no answer, or none unless held at the limit; `ok` otherwise.
+    pub full_state: State,
+    /// Level flight (or hover); `None` where no rpm gives the thrust.
+    pub level: Option<Level>,
+    /// Why level flight has no answer; `ok` otherwise. An answer beyond the engine's power or limit stands, marked by this.
+    pub level_state: State,
+}
+
+/// Full throttle at one speed.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct FullThrottle {
+    /// Propeller rpm.
+    pub rpm: f64,
+    /// Whether the throttle is drawn back to hold the engine at its limit rpm.
+    pub held_at_limit: bool,
+    /// Angle the blades are turned in the hub, degrees.
+    pub turn_deg: f64,
+    /// Thrust of all propellers, N.
+    pub thrust_n: f64,
+    /// Shaft power of one engine, W.
+    pub power_w: f64,
+    /// `T V/P`, where all are positive.
+    pub efficiency: Option<f64>,
+    /// Helical Mach number of the tip.
+    pub tip_mach: f64,
+    /// Rate of climb `(T − D) V/W` of an aeroplane, lift taken as weight, m/s.
+    pub rate_of_climb_m_s: Option<f64>,
+    /// Angle of climb, `sin γ = (T − D)/W`, degrees.
+    pub climb_angle_deg: Option<f64>,
+    /// Departure at each of the envelope's radius fractions, degrees.
+    pub departure_deg: Vec<Option<f64>>,
+}
+
+/// Level flight (or hover) at one speed.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Level {
+    /// Propeller rpm.
+    pub rpm: f64,
+    /// Angle the blades are turned in the hub, degrees.
+    pub turn_deg: f64,
+    /// Shaft power of one engine, W.
+    pub power_w: f64,
+    /// Shaft power over that at full throttle at this rpm.
+    pub power_share: Option<f64>,
+    /// `T V/P`, where all are positive.
+    pub efficiency: Option<f64>,
+    /// Helical Mach number of the tip.
+    pub tip_mach: f64,
+    /// Fuel flow of all engines, kg/h.
+    pub fuel_kg_per_h: Option<f64>,
+    /// Battery current of one motor, A.
+    pub battery_current_a: Option<f64>,
+    /// Time aloft on all fuel or on the usable charge, at this mass and without reserve, s.
+    pub endurance_s: Option<f64>,
+    /// The same as a distance in still air, m.
+    pub range_m: Option<f64>,
+    /// Departure at each of the envelope's radius fractions, degrees.
+    pub departure_deg: Vec<Option<f64>>,
+}
+
+/// A place on the speed axis.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct Mark {
+    /// True airspeed, m/s.
+    pub airspeed_m_s: f64,
+    /// Propeller rpm there.
+    pub rpm: f64,
+    /// What is best there, in its own unit.
+    pub value: f64,
+    /// Whether the engine is held at its limit rpm there.
+    pub held_at_limit: bool,
+}
+
+/// Places of an envelope that decide; `None` where there is none.
+#[derive(Clone, Debug, Default, PartialEq, Serialize)]
+pub struct Marks {
+    /// Best rate of climb, m/s.
+    pub best_rate_of_climb: Option<Mark>,
+    /// Best angle of climb, degrees.
+    pub best_angle_of_climb: Option<Mark>,
+    /// Top speed; the value is thrust, N.
+    pub top_speed: Option<Mark>,
+    /// Longest range, m.
+    pub best_range: Option<Mark>,
+    /// Longest time aloft, s.
+    pub best_endurance: Option<Mark>,
+    /// Speed from which full throttle would pass the engine's limit rpm or the end of its curve, m/s.
+    pub limit_rpm_from_m_s: Option<f64>,
+    /// Speeds at which the tip at full throttle passes the Mach numbers of [`TIP_MACHS`], m/s, each where it is passed.
+    pub tip_mach_from: Vec<TipMach>,
+}
+
+/// Where the tip passes a Mach number.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct TipMach {
+    /// The Mach number.
+    pub tip_mach: f64,
+    /// True airspeed, m/s.
+    pub airspeed_m_s: f64,
+}
+
+/// Helical Mach numbers of the tip that an envelope looks for. Common practice: above about 0.85 a propeller loses efficiency and grows loud,
+/// above 0.92 badly so.
+pub const TIP_MACHS: [f64; 2] = [0.85, 0.92];
