@@ -50,6 +50,12 @@ impl Library {
         set.get_or_init(|| one_set(&entry.packed, *n).map(Arc::new)).as_ref()
     }
 
+    /// Whether a family's outline is known.
+    #[must_use]
+    pub fn has_outline(&self, name: &str) -> bool {
+        self.entry(name).is_some_and(|e| !e.packed.outline.is_empty())
+    }
+
     /// The outline of a family at a thickness ratio, where the family has one and it can be drawn that thick.
     #[must_use]
     pub fn outline(&self, name: &str, thickness_ratio: f64) -> Option<Outline> {

@@ -42,7 +42,7 @@ pub fn Figure(props: &FigureProps) -> Html {
         ("as table", format!("{}: show as table", props.title))
     };
     html! {
-        <figure class={classes!("figure", props.class.clone())}>
+        <figure class={classes!("figure", tabled.then_some("is-tabled"), props.class.clone())}>
             <figcaption>
                 <span class="figure-title">{ &props.title }</span>
                 <button type="button" class="figure-switch" {onclick} aria-label={name}>{ words }</button>

@@ -6,7 +6,7 @@ use crate::chart::number::signed;
 use yew::prelude::*;
 
 /// Width of one class.
-const CELL: f64 = 24.0;
+const CELL: f64 = 20.0;
 const LEFT: f64 = 34.0;
 const WIDTH: f64 = LEFT + CELL * CLASSES as f64 + 34.0;
 

@@ -22,6 +22,8 @@ fn open_space(layout: &Layout, props: &LineChartProps) -> Clear {
     // Without words of the axis there, labels may stand over the frame.
     let top = if heading(&props.y).is_empty() { -6.0 } else { layout.top };
     let mut clear = Clear::new([layout.left, layout.right, top, layout.low]);
+    let across = (0..=80).map(|i| layout.left + layout.width() * f64::from(i) / 80.0);
+    clear.keep_off_points(across.map(|x| [x, layout.top]));
     for series in &props.series {
         clear.keep_off_points(dense(layout, series));
     }

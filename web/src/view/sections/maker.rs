@@ -1,6 +1,7 @@
 //! Making a polar: an outline, conditions, the run in a worker, and what comes of it.
 
 use spokeshave::job::Job;
+use spokeshave::section::library;
 use spokeshave::section::make::Comparison;
 use spokeshave::section::outline::{MAX_BYTES, Outline};
 use web_sys::js_sys::Date;
@@ -186,7 +187,7 @@ fn Source(props: &SourceProps) -> Html {
         }
     };
     let names: Vec<String> =
-        section_names(&props.job).into_iter().filter(|n| listed(&props.job, n).is_some()).collect();
+        section_names(&props.job).into_iter().filter(|n| has_outline(&props.job, n)).collect();
     let mut options: Vec<AttrValue> = vec!["take one as a start".into()];
     options.extend(names.iter().map(|n| AttrValue::from(n.clone())));
     let onpick = {
@@ -216,12 +217,17 @@ fn Source(props: &SourceProps) -> Html {
     }
 }
 
+fn has_outline(job: &Job, name: &str) -> bool {
+    let own = job.sections.iter().find(|own| own.name == name);
+    own.map_or_else(|| library().has_outline(name), |own| !own.outline.is_empty())
+}
+
 /// The outline of a section as a list; none where it has none.
 fn listed(job: &Job, name: &str) -> Option<String> {
     let own = job.sections.iter().find(|own| own.name == name);
     let outline = match own {
         Some(own) => own.drawn().ok()??,
-        None => spokeshave::section::library().outline(name, 0.12)?,
+        None => library().outline(name, 0.12)?,
     };
     let points = outline.points().iter().map(|[x, y]| format!("{x:.6} {y:.6}"));
     Some(std::iter::once(format!("{name}, as drawn")).chain(points).collect::<Vec<_>>().join("\n"))
