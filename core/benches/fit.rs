@@ -1,4 +1,4 @@
-//! What matching costs: one flight point, the line of the map.
+//! What matching costs: one flight point, the line of the map, the whole speed range, a map over speed and height.
 
 use std::hint::black_box;
 
@@ -37,5 +37,20 @@ fn line(c: &mut Criterion) {
     });
 }
 
-criterion_group!(benches, flight_points, line);
+fn ranges(c: &mut Criterion) {
+    let rig = rig();
+    let point = point(None, Setting::FullThrottle {});
+    c.bench_function("envelope, 60 speeds, departures at 4 radii", |b| {
+        b.iter(|| fit::envelope(&rig, black_box(&point), 60, &[0.35, 0.5, 0.75, 0.9]));
+    });
+    let speeds: Vec<f64> = (0..40).map(|i| 1.5 * f64::from(i)).collect();
+    let heights: Vec<f64> = (0..40).map(|i| 100.0 * f64::from(i)).collect();
+    let mut group = c.benchmark_group("maps");
+    group.sample_size(10);
+    group.bench_function("matched points, 40 heights x 40 speeds", |b| {
+        b.iter(|| fit::matched(&rig, black_box(&heights), &speeds, 0.0));
+    });
+}
+
+criterion_group!(benches, flight_points, line, ranges);
 criterion_main!(benches);

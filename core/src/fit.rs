@@ -16,21 +16,29 @@ use root::Missed;
 use settle::{Demand, Free, Governed, Met, STEPS};
 use trail::Trail;
 
+mod ceiling;
+mod crossings;
 mod envelope;
 mod full;
 mod held;
 mod line;
 mod marks;
+mod matched;
 mod meeting;
 mod root;
 mod settle;
+mod take_off;
 mod top_speed;
 mod trail;
 
+pub use ceiling::ceilings;
+pub use crossings::crossings;
 pub use envelope::envelope;
 pub use held::held;
 pub use line::line;
+pub use matched::matched;
 pub use meeting::meeting;
+pub use take_off::{ROLLING_FRICTION, take_off};
 
 /// Fastest tip considered where no engine sets a limit, as a Mach number.
 const FASTEST_TIP_MACH: f64 = 1.2;

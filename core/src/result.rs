@@ -4,7 +4,10 @@ use serde::Serialize;
 
 mod fit;
 
-pub use fit::{Envelope, EnvelopePoint, FullThrottle, HeldAtLimit, Level, Mark, Marks, TIP_MACHS, TipMach};
+pub use fit::{
+    Ceilings, Crossing, Envelope, EnvelopePoint, Fit, FullThrottle, HeldAtLimit, Level, Mark, Marks,
+    TIP_MACHS, TakeOff, TipMach,
+};
 
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]

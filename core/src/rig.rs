@@ -6,9 +6,12 @@ use crate::air::{Air, AirError};
 use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
 use crate::job::{FlightPoint, Job, PitchControl};
-use crate::result::{Analysis, Note, PointResult, PropellerFigures, SectionPoint};
+use crate::result::{Analysis, Fit, Note, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
 use crate::{fit, report};
+
+/// Radius fractions at which the fit tells the departure.
+pub const FIT_RADIUS_FRACTIONS: [f64; 4] = [0.35, 0.5, 0.75, 0.9];
 
 /// A job ready for computing.
 #[derive(Clone, Debug)]
@@ -110,6 +113,24 @@ impl Rig {
         let at = self.condition(index)?;
         let line = fit::line(self, &at, speeds);
         Some(departure_map(&self.rotor, &line, &self.map_radii_m(radii)))
+    }
+
+    /// The whole fit at a flight point's air: the speed range with `speeds` speeds, take-off, ceilings. `None` when there is no such point,
+    /// no engine, or the engine cannot turn the propeller.
+    #[must_use]
+    pub fn fit(&self, index: usize, speeds: u32) -> Option<Fit> {
+        let point = self.job.flight_points.get(index)?;
+        let envelope = fit::envelope(self, point, speeds, &FIT_RADIUS_FRACTIONS)?;
+        let air = air_of(point).ok()?;
+        let still = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: self.turn_rad() };
+        Some(Fit {
+            spokeshave: crate::job::VERSION,
+            title: self.job.title.clone(),
+            take_off: fit::take_off(self, &envelope),
+            ceilings: fit::ceilings(self, point.isa_offset_k),
+            standing_crossings: fit::crossings(self, &still),
+            envelope,
+        })
     }
 
     /// How far the blades are turned in the hub, rad.

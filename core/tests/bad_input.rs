@@ -1,7 +1,7 @@
 //! Bad job files are refused by path, with what was found and what is allowed.
 
 use serde_json::{Value, json};
-use spokeshave::job::{DEMOS, Job, JobError, MOST_BYTES};
+use spokeshave::job::{DEMOS, Engine, Job, JobError, MOST_BYTES};
 
 fn demo() -> Value {
     serde_json::from_str(DEMOS[0].json).unwrap()
@@ -37,6 +37,11 @@ fn each_wrong_value_is_named_by_its_path() {
         ("/propeller/pitch_control", json!({"kind": "magic"}), "propeller.pitch_control"),
         ("/engine/full_throttle/1/rpm", json!("fast"), "engine.full_throttle[1].rpm: invalid type"),
         ("/engine/full_throttle/1/rpm", json!(1000), "engine.full_throttle[1].rpm: 1000"),
+        ("/engine/full_throttle", json!([{"rpm": 2000, "power_w": 40_000}]), "engine.full_throttle: 1"),
+        ("/engine/full_throttle/1/power_w", json!(0), "engine.full_throttle[1].power_w: 0"),
+        ("/engine/gear_ratio", json!(0), "engine.gear_ratio: 0"),
+        ("/aircraft/drag/cd0", json!(0), "aircraft.drag.cd0: 0"),
+        ("/aircraft/mass_kg", json!(0), "aircraft.mass_kg: 0"),
         ("/engine/kind", json!("steam"), "engine.kind: \"steam\""),
         ("/engine/altitude_law", json!({"kind": "held-to"}), "engine.altitude_law: missing field"),
         ("/engine/turbo", json!(true), "engine.turbo: unknown field"),
@@ -59,6 +64,14 @@ fn each_wrong_value_is_named_by_its_path() {
         let message = refusal(pointer, value.clone());
         assert!(message.contains(expected), "{pointer} = {value}: {message:?} has no {expected:?}");
     }
+}
+
+#[test]
+fn an_empty_battery_is_refused() {
+    let mut job = Job::from_json(DEMOS[1].json).unwrap();
+    let Some(Engine::Electric(electric)) = &mut job.engine else { panic!("an electric motor") };
+    electric.battery.capacity_ah = 0.0;
+    assert_eq!(job.check()[0].path, "engine.battery.capacity_ah");
 }
 
 #[test]

@@ -1,9 +1,12 @@
 //! The fit over the speed range: its figures hold together, its curves do not jump, and limits are told.
 
-use spokeshave::fit::envelope;
-use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, Setting};
+use spokeshave::air::Air;
+use spokeshave::aircraft::{drag_n, speeds};
+use spokeshave::fit::{ceilings, crossings, envelope, matched, take_off};
+use spokeshave::job::{Aeroplane, Aircraft, DEMOS, Drag, Engine, FlightPoint, Job, Setting};
 use spokeshave::result::{Envelope, Note, State};
-use spokeshave::rig::Rig;
+use spokeshave::rig::{Rig, air_of};
+use spokeshave::rotor::Condition;
 
 fn demo(index: usize) -> Job {
     Job::from_json(DEMOS[index].json).unwrap()
@@ -124,4 +127,120 @@ fn what_cannot_be_is_told_and_gives_no_figures() {
     assert!(found.marks.top_speed.is_none() && found.marks.best_range.is_none());
     let climbs = found.points.iter().filter_map(|p| p.full.as_ref()?.rate_of_climb_m_s);
     assert!(climbs.into_iter().all(|c| c < 0.0));
+}
+
+/// Common practice: an aeroplane of 757 kg and 14.86 m² whose polar gives 63 kt for least drag at sea level has 48 kt for least power and 82 kt for
+/// best range by the 3^(1/4) rule, and needs there about 39 kW at the shaft. The zero-lift drag is not given: 0.035 and a propeller's efficiency of
+/// 0.83 are assumed, so that the power is a check of size only.
+#[test]
+fn validate_speeds_common_practice() {
+    const KNOT_M_S: f64 = 1852.0 / 3600.0;
+    let (mass_kg, area, least_drag) = (757.0, 14.86, 63.0 * KNOT_M_S);
+    let lift = 2.0 * mass_kg * 9.806_65 / (1.225 * area * least_drag * least_drag);
+    let drag = Drag { cd0: 0.035, k: Some(0.035 / (lift * lift)), aspect_ratio: None, oswald: None };
+    let a = Aeroplane { mass_kg, wing_area_m2: area, drag, cl_max: None, engines: 1 };
+    let air = Air::standard(0.0, 0.0).unwrap();
+    let found = speeds(&a, &air);
+    assert!((found.least_power_m_s / KNOT_M_S - 48.0).abs() < 0.5);
+    assert!((found.fast_cruise_m_s / KNOT_M_S - 82.0).abs() < 1.0);
+    let shaft_w = drag_n(&a, &air, 82.0 * KNOT_M_S).unwrap() * 82.0 * KNOT_M_S / 0.83;
+    assert!((shaft_w - 39e3).abs() < 2e3, "{shaft_w}");
+}
+
+/// Common practice: 1.753 m across, 1.473 m pitch, 2000 rpm, J about 0.68: at 0.75 R an advance angle of about 16°, a blade angle of about 20°, an
+/// angle between them near 4°, slip about 20 %.
+#[test]
+fn validate_angles_common_practice() {
+    let mut job = demo(0);
+    job.propeller.diameter_m = 1.753;
+    for s in &mut job.propeller.stations {
+        (s.angle_deg, s.pitch_m) = (None, Some(1.473));
+    }
+    job.flight_points = vec![full(Some(0.68 * 1.753 * 2000.0 / 60.0))];
+    job.flight_points[0].setting = Setting::Rpm { rpm: 2000.0 };
+    let f = Rig::new(&job).unwrap().point(0).unwrap().figures;
+    let (advance, blade) = (f.advance_angle_075_deg.unwrap(), f.blade_angle_075_deg.unwrap());
+    assert!((advance - 16.0).abs() < 0.5 && (blade - 20.0).abs() < 0.5, "{advance} {blade}");
+    assert!((blade - advance - 4.0).abs() < 0.5 && (f.slip.unwrap() - 0.2).abs() < 0.015);
+}
+
+#[test]
+fn take_off_lies_between_closed_forms() {
+    let job = demo(0);
+    let rig = Rig::new(&job).unwrap();
+    let found = range(&job, 60);
+    let t = take_off(&rig, &found).unwrap();
+    // With constant net thrust the roll is m V²/2F: the greatest net thrust is at rest, the least at lift-off.
+    let thrust = |v: f64| {
+        let p = found
+            .points
+            .iter()
+            .min_by(|a, b| (a.airspeed_m_s - v).abs().total_cmp(&(b.airspeed_m_s - v).abs()));
+        p.unwrap().full.as_ref().unwrap().thrust_n
+    };
+    let v = t.lift_off_m_s;
+    let friction = t.rolling_friction * 430.0 * 9.806_65;
+    let drag = 0.5 * 1.225 * v * v * 11.5 * 0.034;
+    let roll = |net: f64| 430.0 * v * v / (2.0 * net);
+    let (shortest, longest) = (roll(thrust(0.0) - friction), roll(thrust(v) - friction - drag));
+    assert!(shortest < t.ground_roll_m && t.ground_roll_m < 1.02 * longest, "{t:?} {shortest} {longest}");
+    assert!(t.distance_to_15_m > t.ground_roll_m + 15.0);
+    let mut heavy = job.clone();
+    let Some(Aircraft::Aeroplane(a)) = &mut heavy.aircraft else { panic!("an aeroplane") };
+    a.mass_kg *= 1.2;
+    let heavier = take_off(&Rig::new(&heavy).unwrap(), &range(&heavy, 60)).unwrap();
+    assert!(heavier.ground_roll_m > 1.3 * t.ground_roll_m, "mass counts more than once");
+}
+
+#[test]
+fn at_the_service_ceiling_the_best_climb_is_half_a_metre_per_second() {
+    let job = demo(0);
+    let rig = Rig::new(&job).unwrap();
+    let found = ceilings(&rig, 0.0).unwrap();
+    let (service, absolute) = (found.service_m.unwrap(), found.absolute_m.unwrap());
+    assert!(service < absolute && absolute < 12_000.0, "{service} {absolute}");
+    let mut there = full(None);
+    for (height, climb) in [(service, 0.5), (absolute, 0.0)] {
+        there.altitude_m = height;
+        let got = envelope(&rig, &there, 80, &[]).unwrap();
+        let best =
+            got.points.iter().filter_map(|p| p.full.as_ref()?.rate_of_climb_m_s).fold(f64::MIN, f64::max);
+        assert!((best - climb).abs() < 0.02, "{best} at {height}");
+    }
+}
+
+#[test]
+fn the_map_of_matched_points_is_the_envelope_at_each_height() {
+    let rig = Rig::new(&demo(0)).unwrap();
+    let speeds: Vec<f64> = (0..12).map(|i| 5.0 * f64::from(i)).collect();
+    let map = matched(&rig, &[0.0, 1500.0, 3000.0], &speeds, 0.0).unwrap();
+    for ((row, column), cell) in map.indexed_iter() {
+        let mut job = demo(0);
+        job.flight_points = vec![full(Some(speeds[column]))];
+        job.flight_points[0].altitude_m = 1500.0 * row as f64;
+        let expected = Rig::new(&job).unwrap().point(0).unwrap().rpm.unwrap();
+        assert!((cell.as_ref().unwrap().rpm / expected - 1.0).abs() < 1e-6, "{row} {column}");
+    }
+    assert!(matched(&rig, &[30_000.0], &speeds, 0.0).is_err());
+}
+
+#[test]
+fn where_engine_and_propeller_agree_more_than_once_the_highest_stable_rpm_counts() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    // A curve with a hollow: the demand, which rises with the cube of the rpm, meets it three times.
+    let demand = |rpm: f64| 52_463.0 * (rpm / 3011.5).powi(3);
+    for (p, share) in piston.full_throttle.iter_mut().zip([1.3, 0.9, 1.2, 0.8, 0.7]) {
+        p.power_w = share * demand(p.rpm);
+    }
+    job.flight_points = vec![full(Some(0.0))];
+    let rig = Rig::new(&job).unwrap();
+    let air = air_of(&job.flight_points[0]).unwrap();
+    let still = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: 0.0 };
+    let found = crossings(&rig, &still);
+    let stable: Vec<bool> = found.iter().map(|c| c.stable).collect();
+    assert_eq!(stable, [true, false, true], "{found:?}");
+    let chosen: Vec<f64> = found.iter().filter(|c| c.chosen).map(|c| c.rpm).collect();
+    let [chosen] = chosen[..] else { panic!("one is chosen: {found:?}") };
+    assert!((chosen / rig.point(0).unwrap().rpm.unwrap() - 1.0).abs() < 1e-6);
 }

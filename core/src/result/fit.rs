@@ -159,3 +159,58 @@ pub struct TipMach {
 /// Helical Mach numbers of the tip that an envelope looks for. Common practice: above about 0.85 a propeller loses efficiency and grows loud,
 /// above 0.92 badly so.
 pub const TIP_MACHS: [f64; 2] = [0.85, 0.92];
+
+/// Take-off on level hard ground without wind.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct TakeOff {
+    /// Rolling friction over weight.
+    pub rolling_friction: f64,
+    /// Speed at lift-off, 1.2 of the stall, m/s.
+    pub lift_off_m_s: f64,
+    /// Ground roll, m.
+    pub ground_roll_m: f64,
+    /// Time of the ground roll, s.
+    pub ground_roll_s: f64,
+    /// Speed at 15 m, 1.3 of the stall, m/s.
+    pub screen_m_s: f64,
+    /// Distance from standstill to a height of 15 m, m.
+    pub distance_to_15_m: f64,
+}
+
+/// Pressure altitudes that full throttle reaches; `None` above 20 km or below sea level.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct Ceilings {
+    /// Where the best rate of climb is 0.5 m/s, m.
+    pub service_m: Option<f64>,
+    /// Where it is nothing, m.
+    pub absolute_m: Option<f64>,
+}
+
+/// An rpm at which propeller and engine agree.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct Crossing {
+    /// Propeller rpm.
+    pub rpm: f64,
+    /// Whether a small change of rpm dies out.
+    pub stable: bool,
+    /// Whether it is the one that counts.
+    pub chosen: bool,
+}
+
+/// All that is known of the fit at one flight point's air.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Fit {
+    /// Version of the contract.
+    pub spokeshave: u32,
+    /// The job's title.
+    pub title: String,
+    /// The speed range.
+    #[serde(flatten)]
+    pub envelope: Envelope,
+    /// Take-off.
+    pub take_off: Option<TakeOff>,
+    /// Ceilings, at the flight point's temperature offset.
+    pub ceilings: Option<Ceilings>,
+    /// Where propeller and engine agree at rest, blades as drawn.
+    pub standing_crossings: Vec<Crossing>,
+}

@@ -1,9 +1,10 @@
 //! `spokeshave analyse`: every flight point, its figures and its stations.
 
-use spokeshave::result::{Analysis, Note, PointResult, State, StationResult};
+use spokeshave::result::{Analysis, PointResult, State, StationResult};
 
-use crate::input::{JobSource, Outcome, Stop, point_index, print, print_csv, print_json};
-use crate::table::{csv_figure, figure, signed, table};
+use crate::input::{Format, JobSource, Outcome, Stop, point_index, print, print_csv, print_json};
+use crate::table::{csv_figure, figure, signed, table, word};
+use crate::vary::VaryArgs;
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
@@ -12,29 +13,75 @@ pub(crate) struct Args {
     /// One flight point by name instead of all
     #[arg(long)]
     point: Option<String>,
-    /// One JSON document, SI units
-    #[arg(long, conflicts_with = "csv")]
-    json: bool,
-    /// Stations of all flight points as CSV, SI units and degrees
-    #[arg(long)]
-    csv: bool,
+    #[command(flatten)]
+    format: Format,
+    #[command(flatten)]
+    vary: VaryArgs,
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
+    if args.vary.any() {
+        return vary(args);
+    }
     let rig = args.source.rig()?;
     let mut analysis = rig.analysis();
     if let Some(name) = &args.point {
         let only = point_index(&rig, Some(name))?;
         analysis.flight_points = analysis.flight_points.into_iter().skip(only).take(1).collect();
     }
-    if args.json {
+    if args.format.json {
         print_json(&analysis)?;
-    } else if args.csv {
+    } else if args.format.csv {
         csv(&analysis)?;
     } else {
         print(&text(&analysis))?;
     }
     Ok(analysis.flight_points.iter().all(|p| p.state == State::Ok))
+}
+
+fn vary(args: &Args) -> Outcome {
+    const HEADER: [&str; 11] = [
+        "flight_point",
+        "state",
+        "airspeed_m_s",
+        "rpm",
+        "thrust_n",
+        "power_w",
+        "efficiency",
+        "tip_mach",
+        "rate_of_climb_m_s",
+        "power_share",
+        "fuel_kg_per_h",
+    ];
+    let mut answered = true;
+    let rows = args.vary.rows(&args.source, |rig| {
+        let only = args.point.as_deref().map(|name| point_index(rig, Some(name))).transpose()?;
+        let points = (0..rig.job.flight_points.len()).filter(|i| only.is_none_or(|o| o == *i));
+        let points: Vec<PointResult> = points.filter_map(|i| rig.point(i)).collect();
+        answered &= points.iter().all(|p| p.state == State::Ok);
+        Ok(points.iter().map(varied_row).collect())
+    })?;
+    let header: Vec<&str> = args.vary.paths().chain(HEADER).collect();
+    print_csv(&header, rows.into_iter())?;
+    Ok(answered)
+}
+
+fn varied_row(p: &PointResult) -> Vec<String> {
+    let (f, m) = (&p.figures, &p.meeting);
+    let figures = [
+        p.airspeed_m_s,
+        p.rpm,
+        f.thrust_n,
+        f.power_w,
+        f.efficiency,
+        f.tip_mach,
+        m.rate_of_climb_m_s,
+        m.power_share,
+        m.fuel_kg_per_h,
+    ];
+    let mut row = vec![p.name.clone(), word(&p.state)];
+    row.extend(figures.into_iter().map(csv_figure));
+    row
 }
 
 fn text(analysis: &Analysis) -> String {
@@ -178,11 +225,6 @@ fn csv(analysis: &Analysis) -> Result<(), Stop> {
 }
 
 fn csv_row(p: &PointResult, i: usize, s: &StationResult) -> Vec<String> {
-    let word = |n: &Note| {
-        serde_json::to_value(n).ok().and_then(|v| v.as_str().map(String::from)).unwrap_or_default()
-    };
-    let state =
-        serde_json::to_value(p.state).ok().and_then(|v| v.as_str().map(String::from)).unwrap_or_default();
     let figures = [
         Some(s.radius_m),
         Some(s.radius_fraction),
@@ -205,8 +247,8 @@ fn csv_row(p: &PointResult, i: usize, s: &StationResult) -> Vec<String> {
         Some(s.thrust_n_per_m),
         Some(s.torque_n_m_per_m),
     ];
-    let mut row = vec![p.name.clone(), state, (i + 1).to_string()];
+    let mut row = vec![p.name.clone(), word(&p.state), (i + 1).to_string()];
     row.extend(figures.into_iter().map(csv_figure));
-    row.push(s.notes.iter().map(word).collect::<Vec<_>>().join(" "));
+    row.push(s.notes.iter().map(|n| word(n)).collect::<Vec<_>>().join(" "));
     row
 }

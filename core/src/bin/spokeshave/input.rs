@@ -35,14 +35,30 @@ pub(crate) struct JobSource {
     demo: Option<String>,
 }
 
+/// How to print.
+#[derive(clap::Args)]
+pub(crate) struct Format {
+    /// One JSON document, SI units
+    #[arg(long, conflicts_with = "csv")]
+    pub(crate) json: bool,
+    /// CSV, SI units and degrees
+    #[arg(long)]
+    pub(crate) csv: bool,
+}
+
 impl JobSource {
-    /// Reads and checks the job.
-    pub(crate) fn rig(&self) -> Result<Rig, Stop> {
-        let (place, text) = match (&self.demo, &self.job) {
+    /// Where the job comes from, and its text.
+    pub(crate) fn text(&self) -> Result<(String, String), Stop> {
+        Ok(match (&self.demo, &self.job) {
             (Some(name), _) => (name.clone(), demo(name)?.json.to_string()),
             (None, Some(path)) => (path.display().to_string(), read(path, MOST_BYTES, "a job")?),
             (None, None) => return Err(Stop::bad("a job file or --demo is needed")),
-        };
+        })
+    }
+
+    /// Reads and checks the job.
+    pub(crate) fn rig(&self) -> Result<Rig, Stop> {
+        let (place, text) = self.text()?;
         let job = Job::from_json(&text).map_err(|e| Stop::BadInput(format!("{place}: {e}")))?;
         Rig::new(&job).map_err(|e| Stop::BadInput(format!("{place}: {e}")))
     }

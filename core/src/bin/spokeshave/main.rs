@@ -4,6 +4,7 @@
 
 mod airfoils;
 mod analyse;
+mod fit;
 mod import;
 mod input;
 mod map;
@@ -11,6 +12,7 @@ mod polar;
 mod sections;
 mod sweep;
 mod table;
+mod vary;
 
 use std::process::ExitCode;
 
@@ -27,6 +29,8 @@ struct Cli {
 const EXAMPLES: &str = "Examples:
   spokeshave analyse --demo light-aeroplane        the departure table of an invented job
   spokeshave analyse JOB.json --json               the same for programs, SI units
+  spokeshave fit JOB.json                          climb, range, top speed, limits over the whole speed range
+  spokeshave fit JOB.json --vary propeller.diameter_m=1.4..1.7:31    the same over any number of the file, CSV
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
@@ -42,6 +46,8 @@ Exit codes: 0 answered, 1 no answer, 2 bad input.";
 enum Command {
     /// Work out every flight point of a job: figures and stations
     Analyse(analyse::Args),
+    /// Where propeller, engine and aircraft meet over the whole speed range
+    Fit(fit::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),
     /// Departure over speed and radius at a flight point's air
@@ -63,6 +69,7 @@ enum Command {
 fn main() -> ExitCode {
     let outcome = match Cli::parse().command {
         Command::Analyse(args) => analyse::run(&args),
+        Command::Fit(args) => fit::run(&args),
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),

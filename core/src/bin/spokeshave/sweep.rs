@@ -2,7 +2,7 @@
 
 use spokeshave::rotor::CurvePoint;
 
-use crate::input::{JobSource, Outcome, point_index, print, print_csv, print_json};
+use crate::input::{Format, JobSource, Outcome, point_index, print, print_csv, print_json};
 use crate::table::{csv_figure, figure, table};
 
 #[derive(clap::Args)]
@@ -15,21 +15,17 @@ pub(crate) struct Args {
     /// Steps from rest to where the thrust is gone
     #[arg(long, default_value_t = 20, value_parser = clap::value_parser!(u32).range(1..=2000))]
     steps: u32,
-    /// One JSON document, SI units
-    #[arg(long, conflicts_with = "csv")]
-    json: bool,
-    /// CSV, SI units
-    #[arg(long)]
-    csv: bool,
+    #[command(flatten)]
+    format: Format,
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
     let rig = args.source.rig()?;
     let index = point_index(&rig, args.point.as_deref())?;
     let curve = rig.curves(index, args.steps);
-    if args.json {
+    if args.format.json {
         print_json(&curve)?;
-    } else if args.csv {
+    } else if args.format.csv {
         let header = ["airspeed_m_s", "advance_ratio", "ct", "cp", "cq", "efficiency", "thrust_n", "power_w"];
         print_csv(&header, curve.iter().map(csv_row))?;
     } else {

@@ -37,3 +37,8 @@ fn clean(v: f64, decimals: usize) -> f64 {
 pub(crate) fn csv_figure(value: Option<f64>) -> String {
     value.map_or_else(String::new, |v| v.to_string())
 }
+
+/// The word by which the JSON knows a state or a note.
+pub(crate) fn word(value: &impl serde::Serialize) -> String {
+    serde_json::to_value(value).ok().and_then(|v| v.as_str().map(String::from)).unwrap_or_default()
+}
