@@ -56,6 +56,8 @@ pub enum State {
     OverLimitRpm,
     /// No rpm within limits absorbs the power or gives the thrust asked for.
     OutOfReach,
+    /// Slower than the stall; said of level flight in an envelope.
+    BelowStall,
 }
 
 impl State {
@@ -71,6 +73,7 @@ impl State {
                 "The propeller would run past the engine's limit rpm, or past the last point of its power curve."
             }
             Self::OutOfReach => "No rpm gives what is asked for.",
+            Self::BelowStall => "Slower than the stall: the wing does not carry the aeroplane.",
         }
     }
 }

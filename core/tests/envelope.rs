@@ -125,6 +125,13 @@ fn what_cannot_be_is_told_and_gives_no_figures() {
     (a.mass_kg, a.cl_max) = (4_000.0, Some(0.2));
     let found = range(&stalls, 30);
     assert!(found.marks.top_speed.is_none() && found.marks.best_range.is_none());
+    // Light enough to climb, but with a fast stall: what lies below it is marked.
+    let Some(Aircraft::Aeroplane(a)) = &mut stalls.aircraft else { panic!("an aeroplane") };
+    (a.mass_kg, a.cl_max) = (430.0, Some(0.2));
+    let hasty = range(&stalls, 30);
+    assert!(hasty.speeds.unwrap().stall_m_s.unwrap() < 57.0 && hasty.marks.top_speed.is_some());
+    let slow = hasty.points.iter().filter(|p| p.airspeed_m_s < 50.0 && p.level.is_some());
+    assert!(slow.into_iter().all(|p| p.level_state == State::BelowStall));
     let climbs = found.points.iter().filter_map(|p| p.full.as_ref()?.rate_of_climb_m_s);
     assert!(climbs.into_iter().all(|c| c < 0.0));
 }

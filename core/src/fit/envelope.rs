@@ -19,7 +19,8 @@ const BEYOND_TOP: f64 = 1.12;
 pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[f64]) -> Option<Envelope> {
     let air = air_of(point).ok()?;
     let at = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
-    let top = top_speed::fastest(rig, &at).ok();
+    let stall = stall_m_s(rig, &at);
+    let top = top_speed::fastest(rig, &at).ok().filter(|top| top.condition.airspeed_m_s >= stall);
     let end = end_m_s(rig, &at, top.as_ref())?;
     let count = count.max(3);
     let speeds_m_s = (0..count).map(|i| end * f64::from(i) / f64::from(count - 1));
@@ -40,6 +41,14 @@ pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[
         marks: marks::marks(rig, &at, &points, top),
         points,
     })
+}
+
+/// The stall in the air of a condition, m/s; 0 where none is known.
+pub(super) fn stall_m_s(rig: &Rig, at: &Condition) -> f64 {
+    match &rig.job.aircraft {
+        Some(Aircraft::Aeroplane(a)) => speeds(a, &at.air).stall_m_s.unwrap_or(0.0),
+        _ => 0.0,
+    }
 }
 
 /// Where the speed range ends.
@@ -84,6 +93,10 @@ impl<'r> Course<'r> {
             .collect()
     }
 
+    fn stall_m_s(&self) -> f64 {
+        stall_m_s(self.solver.rig, &self.at)
+    }
+
     fn here(&self, airspeed_m_s: f64) -> Condition {
         Condition { airspeed_m_s, ..self.at }
     }
@@ -126,7 +139,12 @@ impl<'r> Course<'r> {
             .map(|&v| {
                 let met = self.solver.level_by_thrust(&self.here(v), &trail)?;
                 trail.push(&met);
-                Ok((met, self.solver.within_engine(&met).err().unwrap_or(State::Ok)))
+                let state = if v < self.stall_m_s() {
+                    State::BelowStall
+                } else {
+                    self.solver.within_engine(&met).err().unwrap_or(State::Ok)
+                };
+                Ok((met, state))
             })
             .collect();
         let departures = self.departures(found.iter().map(|f| f.as_ref().ok().map(|(m, _)| m.condition)));

@@ -1,7 +1,7 @@
 //! Places of the speed range that decide: the tops of curves by the parabola through three points, and where limits are passed.
 
 use super::Solver;
-use super::envelope::{full_throttle, level};
+use super::envelope::{full_throttle, level, stall_m_s};
 use super::full::Full;
 use super::trail::Trail;
 use crate::result::{EnvelopePoint, FullThrottle, Level, Mark, Marks, State, TIP_MACHS, TipMach};
@@ -11,6 +11,7 @@ use crate::rotor::Condition;
 /// The marks of an envelope's points; `top` is its top speed.
 pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Option<Full>) -> Marks {
     let solver = Solver::new(rig);
+    let stall = stall_m_s(rig, at);
     let here = |airspeed_m_s: f64| Condition { airspeed_m_s, ..*at };
     let full = |v: f64| {
         let full = solver.full(&here(v), &mut Trail::default()).ok()?;
@@ -21,12 +22,12 @@ pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Op
         Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
     };
     let climb = |of: fn(&FullThrottle) -> Option<f64>| {
-        let v = summit(points, |p| p.full.as_ref().and_then(of))?;
+        let v = summit(points, stall, |p| p.full.as_ref().and_then(of))?;
         let f = full(v)?;
         of(&f).map(|value| Mark { airspeed_m_s: v, rpm: f.rpm, value, held_at_limit: f.held_at_limit })
     };
     let cruise = |of: fn(&Level) -> Option<f64>| {
-        let v = summit(points, |p| p.level.as_ref().and_then(of))?;
+        let v = summit(points, stall, |p| p.level.as_ref().and_then(of))?;
         let l = flight(v)?;
         of(&l).map(|value| Mark { airspeed_m_s: v, rpm: l.rpm, value, held_at_limit: false })
     };
@@ -52,11 +53,11 @@ pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Op
 }
 
 /// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or the highest point where it is at
-/// an end. Only speeds above rest count.
-fn summit(points: &[EnvelopePoint], of: impl Fn(&EnvelopePoint) -> Option<f64>) -> Option<f64> {
+/// an end. Only speeds above rest and from the stall on count.
+fn summit(points: &[EnvelopePoint], stall: f64, of: impl Fn(&EnvelopePoint) -> Option<f64>) -> Option<f64> {
     let values: Vec<(f64, f64)> = points
         .iter()
-        .filter(|p| p.airspeed_m_s > 0.0)
+        .filter(|p| p.airspeed_m_s > 0.0 && p.airspeed_m_s >= stall)
         .filter_map(|p| of(p).map(|value| (p.airspeed_m_s, value)))
         .collect();
     let top = (0..values.len()).max_by(|&a, &b| values[a].1.total_cmp(&values[b].1))?;

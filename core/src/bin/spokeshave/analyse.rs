@@ -249,6 +249,6 @@ fn csv_row(p: &PointResult, i: usize, s: &StationResult) -> Vec<String> {
     ];
     let mut row = vec![p.name.clone(), word(&p.state), (i + 1).to_string()];
     row.extend(figures.into_iter().map(csv_figure));
-    row.push(s.notes.iter().map(|n| word(n)).collect::<Vec<_>>().join(" "));
+    row.push(s.notes.iter().map(word).collect::<Vec<_>>().join(" "));
     row
 }

@@ -154,6 +154,12 @@ fn verdict_table(fit: &Fit) -> String {
 fn limits(fit: &Fit) -> Vec<String> {
     let m = &fit.envelope.marks;
     let mut said = Vec::new();
+    if let Some(stall) = fit.envelope.speeds.and_then(|s| s.stall_m_s) {
+        said.push(format!(
+            "The stall is at {:.0} km/h; level flight and climb count from there on.",
+            3.6 * stall
+        ));
+    }
     if let Some(v) = m.limit_rpm_from_m_s {
         said.push(format!(
             "From {:.0} km/h on full throttle would pass the engine's limit rpm, or the end of its power curve: figures there are throttled back to it.",
@@ -167,7 +173,7 @@ fn limits(fit: &Fit) -> Vec<String> {
         );
     }
     if m.top_speed.is_none() {
-        said.push("There is no level flight at full throttle.".into());
+        said.push("No level flight at full throttle is as fast as the stall.".into());
     }
     for t in &m.tip_mach_from {
         said.push(format!("From {:.0} km/h on the tip passes Mach {:.2}.", 3.6 * t.airspeed_m_s, t.tip_mach));
@@ -178,8 +184,8 @@ fn limits(fit: &Fit) -> Vec<String> {
             fit.standing_crossings.iter().map(|c| format!("{:.0}", c.rpm)).collect::<Vec<_>>().join(", ")
         ));
     }
-    if said.is_empty() {
-        said.push("No limit is passed in this range.".into());
+    if m.limit_rpm_from_m_s.is_none() && m.tip_mach_from.is_empty() {
+        said.push("Neither the limit rpm nor a tip Mach number of note is passed in this range.".into());
     }
     said.push(
         "Estimates at this mass, without reserve, wind or slope; keep to the handbook and to local rules."

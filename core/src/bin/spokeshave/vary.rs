@@ -120,7 +120,7 @@ fn set(document: &mut Value, path: &str, value: f64) -> Result<(), Stop> {
         return Err(Stop::BadInput(format!("--vary: {path}: not a number in the job")));
     }
     // A count stays a count.
-    let whole = old.is_some_and(|old| old.is_u64()) && value.fract() == 0.0 && (0.0..1e9).contains(&value);
+    let whole = old.is_some_and(Value::is_u64) && value.fract() == 0.0 && (0.0..1e9).contains(&value);
     let number = if whole { Some(Number::from(value as u64)) } else { Number::from_f64(value) };
     let object = place.as_object_mut().ok_or_else(|| missing(name))?;
     object.insert(name.into(), number.map_or(Value::Null, Value::Number));
