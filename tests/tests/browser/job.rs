@@ -175,3 +175,27 @@ async fn a_page_that_came_with_a_job_does_not_show_another_ones() -> Result<()> 
     })
     .await
 }
+
+/// Picks the second of a list as a person does: the browser moves the list before the page hears of it.
+const PICK_FACE: &str = r#"
+    const list = document.querySelector('[aria-label="Angles measured to"]');
+    list.selectedIndex = 1;
+    list.dispatchEvent(new Event('change', { bubbles: true }));
+"#;
+
+#[tokio::test(flavor = "multi_thread")]
+async fn a_list_shows_what_was_picked_and_what_undo_brings_back() -> Result<()> {
+    drive("list", async |browser| {
+        let shown = async || {
+            let text = "return document.querySelector('[aria-label=\"Angles measured to\"]').selectedOptions[0].text";
+            browser.run(text).await
+        };
+        browser.open_page().await?;
+        browser.run(PICK_FACE).await?;
+        browser.wait("the flat face", async || Ok((shown().await? == "flat face").then_some(()))).await?;
+        browser.control_starting("button", "Undo: what angles are measured to").await?.click().await?;
+        browser.wait("the chord line", async || Ok((shown().await? == "chord line").then_some(()))).await?;
+        assert_quiet(browser).await
+    })
+    .await
+}

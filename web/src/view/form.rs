@@ -172,21 +172,38 @@ pub struct PickProps {
 #[component]
 pub fn Pick(props: &PickProps) -> Html {
     let (onpick, picked) = (props.onpick.clone(), props.picked);
+    let list = use_node_ref();
+    {
+        let list = list.clone();
+        use_effect_with((picked, props.options.clone()), move |(picked, _)| stand_on(&list, *picked));
+    }
     let onchange = Callback::from(move |e: Event| {
         let Some(select) = e.target_dyn_into::<HtmlSelectElement>() else { return };
         onpick.emit(usize::try_from(select.selected_index()).unwrap_or(0));
-        // A choice that is refused does not stand; one that is taken is drawn anew.
-        select.set_selected_index(picked.and_then(|i| i32::try_from(i).ok()).unwrap_or(-1));
+        // A choice that is refused does not stand; one that is taken is set when it is drawn.
+        select.set_selected_index(index(picked));
     });
     let options = props.options.iter().enumerate().map(|(i, text)| {
         let off = props.off.get(i).copied().unwrap_or(false);
         html! { <option key={i} selected={props.picked == Some(i)} disabled={off}>{ text }</option> }
     });
-    let list = html! { <select aria-label={props.label.clone()} {onchange}>{ for options }</select> };
+    let list =
+        html! { <select ref={list} aria-label={props.label.clone()} {onchange}>{ for options }</select> };
     if props.bare {
         return list;
     }
     html! { <div class="labelled"><span class="label">{ &props.label }</span>{ list }</div> }
+}
+
+/// Once a person has picked, only this moves a list: its options' attributes no longer do.
+fn stand_on(list: &NodeRef, picked: Option<usize>) {
+    if let Some(select) = list.cast::<HtmlSelectElement>() {
+        select.set_selected_index(index(picked));
+    }
+}
+
+fn index(picked: Option<usize>) -> i32 {
+    picked.and_then(|i| i32::try_from(i).ok()).unwrap_or(-1)
 }
 
 /// Properties of [`Switch`].

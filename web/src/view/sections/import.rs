@@ -58,7 +58,7 @@ pub(super) fn Import() -> Html {
         })
     };
     html! {
-        <div class="import">
+        <div class="import unprinted">
             <h3>{ "Bring in a measured table" }</h3>
             <p class="note">
                 { "A line of headings with units, then a row for each angle. Needed: alpha_deg or alpha_rad, cl, cd. Also read: reynolds, \

@@ -71,7 +71,7 @@ pub(super) fn Maker(props: &MakerProps) -> Html {
         })
     };
     html! {
-        <div class="maker">
+        <div class="maker unprinted">
             <h3>{ "Make a polar" }</h3>
             <div class="maker-grid">
                 <Source form={shown.clone()} job={props.state.job().as_ref().clone()} on={change.clone()}
