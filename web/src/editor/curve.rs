@@ -107,11 +107,17 @@ fn curve(frame: &Frame, line: &Line, i: usize, selected_m: f64) -> Html {
     let places = [2, 5].map(|ninths| line.points[line.points.len() * ninths / 9]);
     let away = |p: &[f64; 2]| (p[0] - selected_m).abs();
     let at = if away(&places[0]) > away(&places[1]) { places[0] } else { places[1] };
-    let off = if i == 0 { 24.0 } else { -10.0 };
+    // A falling curve leaves room on the left under it.
+    let falls = line.points.first().zip(line.points.last()).is_some_and(|(a, b)| a[1] > 2.0 * b[1]);
+    let (off, anchor) = match (i, falls) {
+        (0, true) => ([-10.0, 20.0], "end"),
+        (0, false) => ([0.0, 24.0], "middle"),
+        _ => ([0.0, -10.0], "middle"),
+    };
     html! {
         <g aria-hidden="true">
             <path class="curve" d={path} />
-            <text class="haloed strong" x={px(frame.x.px(at[0]))} y={px(frame.y.px(at[1]) + off)} text-anchor="middle">{ line.name }</text>
+            <text class="haloed strong" x={px(frame.x.px(at[0]) + off[0])} y={px(frame.y.px(at[1]) + off[1])} text-anchor={anchor}>{ line.name }</text>
         </g>
     }
 }

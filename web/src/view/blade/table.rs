@@ -3,6 +3,7 @@
 use std::rc::Rc;
 
 use spokeshave::drawn::DrawnStation;
+use spokeshave::job::AngleReference;
 use spokeshave::result::PointResult;
 use yew::prelude::*;
 
@@ -75,6 +76,10 @@ pub fn StationTable(props: &StationTableProps) -> Html {
             <p class="note">
                 { "Boxed figures are yours to type in; a comma or a point is decimal, a unit may follow. " }
                 if columns.face { { "“On face” is what a protractor reads on the flat back. " } }
+                { match job.propeller.angle_reference {
+                    AngleReference::ChordLine => "Angles are kept to the chord line, and pitch is reckoned from that. ",
+                    AngleReference::FlatFace => "Angles are kept as read on the flat face, and pitch is reckoned from that. ",
+                } }
                 { "“To best” is the first turn towards the best angle; the inflow moves a little when the blade does. " }
                 if one_section(job).is_some() {
                     <button type="button" class="inline" onclick={by_station}>
