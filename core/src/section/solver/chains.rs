@@ -1,4 +1,5 @@
-//! The linearised layer as three chains, both sides and the wake, eliminated down to one dense system for the speeds from outside.
+//! The linearised layer as three chains, both sides and the wake, eliminated down to one dense system for the
+//! speeds from outside.
 
 use super::dense::{Factors, Matrix, add_scaled, dot};
 use super::layer::{Layer, State, varying};
@@ -191,7 +192,8 @@ fn advance(rows: &Rows, step: &Step, before: usize, own: usize) -> Rows {
     })
 }
 
-/// What one side contributes to the first node of the wake: sums of the thicknesses, mean of the shear weighted by theta.
+/// What one side contributes to the first node of the wake: sums of the thicknesses, mean of the shear
+/// weighted by theta.
 fn edge_step(layer: &Layer, side: usize, c: &[f64]) -> Step {
     let first = &layer.state[layer.course.body];
     let node = if side == 0 { 0 } else { layer.course.body - 1 };

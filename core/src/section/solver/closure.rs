@@ -1,10 +1,10 @@
 //! What the shape of a velocity profile says of friction, dissipation, growth of waves and shear stress.
 //!
 //! # References
-//! Drela, Giles, "Viscous-Inviscid Analysis of Transonic and Low Reynolds Number Airfoils", AIAA J. 25(10), 1987 (closures,
-//! lag equation, envelope of amplification); Drela, "Flight Vehicle Aerodynamics", 2014, chapter 4; Whitfield's
-//! compressible shape relations as in the first. Coefficients from memory; one factor is
-//! fitted here, see [`FRICTION_FACTOR`].
+//! Drela, Giles, "Viscous-Inviscid Analysis of Transonic and Low Reynolds Number Airfoils", AIAA J. 25(10),
+//! 1987 (closures, lag equation, envelope of amplification); Drela, "Flight Vehicle Aerodynamics", 2014,
+//! chapter 4; Whitfield's compressible shape relations as in the first. Coefficients from memory; one factor
+//! is fitted here, see [`FRICTION_FACTOR`].
 
 use super::dual::Dual;
 
@@ -17,7 +17,8 @@ pub(super) const LAG_RATE: f64 = 5.6;
 /// Equilibrium shear stress: half of 1/(A^2 B).
 const SHEAR: f64 = 0.5 / (LAG_A * LAG_A * LAG_B);
 
-/// Factor on the turbulent friction at the wall: brings the closure, 2 to 6 % low, to the plate of Karman and Schoenherr.
+/// Factor on the turbulent friction at the wall: brings the closure, 2 to 6 % low, to the plate of Karman and
+/// Schoenherr.
 const FRICTION_FACTOR: f64 = 1.04;
 
 /// What kind of layer a station is in.
@@ -52,8 +53,8 @@ impl Gas {
     }
 }
 
-/// State of a layer at a station: momentum and displacement thickness, amplification n (laminar) or root of the shear stress
-/// coefficient (turbulent), and edge speed.
+/// State of a layer at a station: momentum and displacement thickness, amplification n (laminar) or root of
+/// the shear stress coefficient (turbulent), and edge speed.
 #[derive(Debug, Clone, Copy, PartialEq)]
 pub(super) struct Point<const K: usize> {
     pub(super) theta: Dual<K>,
@@ -143,8 +144,8 @@ fn energy_laminar<const K: usize>(hk: Dual<K>) -> Dual<K> {
     1.515 + if hk.v < 4.0 { 0.076 * square } else { 0.015 * square }
 }
 
-/// Friction of laminar profiles, `Re_theta Cf`: the fit of 1987, which balances with the dissipation at the shape of the
-/// Blasius profile, so that waves on a plate grow as they should.
+/// Friction of laminar profiles, `Re_theta Cf`: the fit of 1987, which balances with the dissipation at the
+/// shape of the Blasius profile, so that waves on a plate grow as they should.
 fn friction_laminar<const K: usize>(hk: Dual<K>) -> Dual<K> {
     if hk.v < 7.4 {
         2.0 * (0.019_77 * (7.4 - hk).square() / (hk - 1.0) - 0.067)
@@ -225,7 +226,8 @@ pub(super) fn wall_shape<const K: usize>(hk: Dual<K>, re_theta: Dual<K>, kind: K
     if kind == Kind::Wake { hk - 1.0 } else { (hk - 1.0 - 18.0 / re_theta).floor_at(0.01) }
 }
 
-/// Dissipation of turbulent profiles, `2 CD/H*`: wall layer, outer layer, and at the wall not below the laminar one.
+/// Dissipation of turbulent profiles, `2 CD/H*`: wall layer, outer layer, and at the wall not below the
+/// laminar one.
 fn dissipation_turbulent<const K: usize>(
     hs: Dual<K>,
     hk: Dual<K>,

@@ -1,8 +1,8 @@
 //! The coupled step: boundary layer and potential flow together, by Newton's method.
 //!
-//! The elimination gives every change of mass defect as `dm = m0 + P W`; with `W = (D - c) dm + r` one dense system is left.
-//! `D` is the change of speed with mass defect in the direction of the flow, `c` its diagonal as far as the local
-//! law of interaction uses it, `r` what the speeds lack of the potential flow.
+//! The elimination gives every change of mass defect as `dm = m0 + P W`; with `W = (D - c) dm + r` one dense
+//! system is left. `D` is the change of speed with mass defect in the direction of the flow, `c` its diagonal
+//! as far as the local law of interaction uses it, `r` what the speeds lack of the potential flow.
 
 use super::chains::Chains;
 use super::closure::Kind;
@@ -17,8 +17,9 @@ pub(super) const TOLERANCE: f64 = 1e-5;
 /// Change in the step before, below which a small residual is believed.
 const SETTLED: f64 = 2e-3;
 
-/// Length over which the curvature of the wake is averaged to each side, over the thickness `theta + dstar` of the wake at the
-/// trailing edge: potential flow turns without bound there, a real wake not within its own thickness.
+/// Length over which the curvature of the wake is averaged to each side, over the thickness `theta + dstar`
+/// of the wake at the trailing edge: potential flow turns without bound there, a real wake not within its own
+/// thickness.
 const CURVE_REACH: f64 = 1.5;
 
 /// What one iteration found and did.
@@ -34,8 +35,8 @@ pub(super) struct Progress {
     pub(super) part: f64,
 }
 
-/// Coefficients of the local law: the diagonal of the influence, faded in behind the stagnation point, none at the trailing
-/// edge node of the wake.
+/// Coefficients of the local law: the diagonal of the influence, faded in behind the stagnation point, none
+/// at the trailing edge node of the wake.
 pub(super) fn law(layer: &Layer, flow: &Flow) -> Vec<f64> {
     let body = layer.course.body;
     let mut c: Vec<f64> = (0..layer.total()).map(|i| flow.by_mass.row(i)[i].max(0.0)).collect();
@@ -48,7 +49,8 @@ pub(super) fn law(layer: &Layer, flow: &Flow) -> Vec<f64> {
     c
 }
 
-/// Speeds from potential flow with the present mass defects, less the present speeds, in the direction of the flow.
+/// Speeds from potential flow with the present mass defects, less the present speeds, in the direction of the
+/// flow.
 pub(super) fn speed_defect(layer: &Layer, flow: &Flow, influence: &Matrix) -> Vec<f64> {
     let mass: Vec<f64> = (0..layer.total()).map(|i| layer.sign(i) * layer.mass(i)).collect();
     (0..layer.total())
@@ -68,8 +70,8 @@ pub(super) fn re_march(layer: &mut Layer, flow: &Flow) -> Vec<f64> {
     c
 }
 
-/// One iteration: march, then the coupled step. `settled` is the change of the step before. None when the system is singular or
-/// the numbers are not finite.
+/// One iteration: march, then the coupled step. `settled` is the change of the step before. None when the
+/// system is singular or the numbers are not finite.
 pub(super) fn iterate(layer: &mut Layer, flow: &Flow, settled: f64, limit: f64) -> Option<Progress> {
     let c = re_march(layer, flow);
     let shape: Vec<f64> = (layer.course.body..layer.total()).map(|i| layer.shape(i)).collect();

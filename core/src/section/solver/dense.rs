@@ -91,7 +91,8 @@ impl Factors {
     }
 }
 
-/// Solves a system of a few unknowns by elimination with partial pivoting; `right` holds several columns. None if singular.
+/// Solves a system of a few unknowns by elimination with partial pivoting; `right` holds several columns.
+/// None if singular.
 pub(super) fn solve_small<const N: usize, const C: usize>(
     mut a: [[f64; N]; N],
     mut right: [[f64; C]; N],

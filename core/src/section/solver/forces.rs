@@ -1,7 +1,8 @@
 //! Lift, drag and moment from a converged flow.
 //!
-//! Lift and moment from the pressure on the outline; drag from the wake by the formula of Squire and Young, ARC R&M 1838 (1937):
-//! `cd = 2 theta u^((H + 5)/2)` at the end of the wake. Compressible pressure by Karman, J. Aero. Sci. 8 (1941), and Tsien (1939).
+//! Lift and moment from the pressure on the outline; drag from the wake by the formula of Squire and Young,
+//! ARC R&M 1838 (1937): `cd = 2 theta u^((H + 5)/2)` at the end of the wake. Compressible pressure by Karman,
+//! J. Aero. Sci. 8 (1941), and Tsien (1939).
 
 use super::dual::Dual;
 use super::layer::Layer;
@@ -22,7 +23,8 @@ fn pressure(speed: f64, mach: f64) -> f64 {
     plain / (beta + 0.5 * mach * mach * plain / (1.0 + beta))
 }
 
-/// Lift square to the free stream and moment about the quarter chord, nose up positive, from the speeds along the outline.
+/// Lift square to the free stream and moment about the quarter chord, nose up positive, from the speeds along
+/// the outline.
 pub(super) fn lift_and_moment(body: &Strip, speeds: &[f64], alpha_rad: f64, mach: f64) -> (f64, f64) {
     let (sin, cos) = alpha_rad.sin_cos();
     let count = body.nodes.len();

@@ -124,8 +124,8 @@ pub(super) fn similar<const K: usize>(p: &Point<K>, q: &Props<K>, a: Dual<K>) ->
 
 /// The three equations of a transition interval: laminar up to the part `w` of it, turbulent from there.
 ///
-/// `trial` is the laminar state at the last station had there been no transition; it does not depend on the turbulent
-/// state there, so that the place of transition is unique.
+/// `trial` is the laminar state at the last station had there been no transition; it does not depend on the
+/// turbulent state there, so that the place of transition is unique.
 pub(super) fn transition<const K: usize>(
     gas: &Gas,
     first: &Point<K>,

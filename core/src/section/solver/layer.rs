@@ -3,7 +3,8 @@
 use super::closure::{Gas, Kind, Point, Props, at_transition, props};
 use super::dual::Dual;
 
-/// State at a node: momentum thickness, displacement thickness, n or root of shear stress coefficient, edge speed.
+/// State at a node: momentum thickness, displacement thickness, n or root of shear stress coefficient, edge
+/// speed.
 pub(super) type State = [f64; 4];
 
 /// Where a side becomes turbulent.
@@ -39,7 +40,8 @@ impl Side {
 #[derive(Debug, Clone, PartialEq)]
 pub(super) struct Course {
     pub(super) gas: Gas,
-    pub(super) n_crit: f64,
+    /// Amplification exponent at transition, by side.
+    pub(super) n_crit: [f64; 2],
     /// Trips of the upper and lower side, in chords from the nose.
     pub(super) trips: [Option<f64>; 2],
     /// Nodes on the outline.
@@ -62,7 +64,12 @@ pub(super) struct Layer {
     pub(super) sides: [Side; 2],
     /// Stations whose own equations could not be solved in the last march.
     pub(super) failed: Vec<bool>,
+    /// Largest relative change of the displacement thickness that a march may make at a station.
+    pub(super) leap: f64,
 }
+
+/// Amplification exponent that no layer reaches.
+const NEVER: f64 = 1e3;
 
 /// Least Reynolds number on momentum thickness at which a trip takes hold.
 pub(super) const TRIP_RE_THETA: f64 = 100.0;
@@ -76,6 +83,7 @@ impl Layer {
             state: speeds.iter().map(|q| [1e-4, 2.2e-4, 0.0, q.abs().max(1e-6)]).collect(),
             sides: [side.clone(), side],
             failed: vec![false; x.len()],
+            leap: f64::INFINITY,
             x,
             arc,
         };
@@ -186,6 +194,30 @@ impl Layer {
             let (a, b) = (self.x[side.nodes[t.station - 1]], self.x[side.nodes[t.station]]);
             a + t.part * (b - a)
         })
+    }
+
+    /// Amplification exponent at the trip of a side, where the layer turns there.
+    pub(super) fn growth_at_trip(&self, side: usize) -> Option<f64> {
+        let nodes = &self.sides[side].nodes;
+        let t = self.sides[side].transition.filter(|t| t.forced)?;
+        let first = &self.state[nodes[t.station - 1]];
+        let growth = |state: &State| props(&self.course.gas, &fixed::<0>(state), Kind::Laminar).growth.v;
+        let (g1, g2) = (growth(first), growth(&t.trial));
+        let dx = self.dx(nodes[t.station - 1], nodes[t.station]);
+        Some(first[2] + dx * t.part * (g1 + 0.5 * t.part * (g2 - g1)))
+    }
+
+    /// Trips a side at an abscissa and nowhere else.
+    pub(super) fn trip_at(&mut self, side: usize, x: f64) {
+        self.course.trips[side] = Some(x);
+        self.course.n_crit[side] = NEVER;
+        self.set_stagnation(self.stagnation);
+    }
+
+    /// Takes trips and exponents of a course again.
+    pub(super) fn let_go(&mut self, course: &Course) {
+        (self.course.trips, self.course.n_crit) = (course.trips, course.n_crit);
+        self.set_stagnation(self.stagnation);
     }
 
     /// Shape parameter at a node.

@@ -1,8 +1,9 @@
-//! The equations of the layer linearised at every station, and eliminated in favour of the speeds from outside.
+//! The equations of the layer linearised at every station, and eliminated in favour of the speeds from
+//! outside.
 //!
-//! Unknowns at a node are the changes of momentum thickness, mass defect and third variable, `z`; the change of the speed is
-//! `c dm + W`, where `W` is the part that comes from everything else. Down a chain every `z` follows from
-//! the one before and from the `W` of both.
+//! Unknowns at a node are the changes of momentum thickness, mass defect and third variable, `z`; the change
+//! of the speed is `c dm + W`, where `W` is the part that comes from everything else. Down a chain every `z`
+//! follows from the one before and from the `W` of both.
 
 use super::closure::{Gas, Kind, Point, props};
 use super::dense::solve_small;
@@ -25,7 +26,8 @@ impl Residual {
 }
 
 impl Layer {
-    /// Residual of a station of a side. At the first the upstream "speed" is the gradient at the stagnation point.
+    /// Residual of a station of a side. At the first the upstream "speed" is the gradient at the stagnation
+    /// point.
     pub(super) fn side_residual(&self, side: usize, station: usize, law: &[f64]) -> Residual {
         let nodes = &self.sides[side].nodes;
         let (node, gas) = (nodes[station], &self.course.gas);
@@ -53,16 +55,16 @@ impl Layer {
                 let lost = t.forced && t.part == 0.0;
                 let trial =
                     if lost { first } else { vary_trial(gas, &self.state[before], &t.trial, dx, c, outside) };
-                let w = if t.forced { Dual::constant(t.part) } else { self.part(&first, &trial, dx) };
+                let w = if t.forced { Dual::constant(t.part) } else { self.part(side, &first, &trial, dx) };
                 Residual::new(transition(gas, &first, &trial, w, (&own, &own_props), dx).0)
             }
         }
     }
 
-    fn part(&self, first: &Point<8>, trial: &Point<8>, dx: f64) -> Dual<8> {
+    fn part(&self, side: usize, first: &Point<8>, trial: &Point<8>, dx: f64) -> Dual<8> {
         let gas = &self.course.gas;
         let (q1, q2) = (props(gas, first, Kind::Laminar), props(gas, trial, Kind::Laminar));
-        critical_part(self.course.n_crit, first.c, q1.growth, q2.growth, dx)
+        critical_part(self.course.n_crit[side], first.c, q1.growth, q2.growth, dx)
     }
 
     /// Residual of a node of the wake after its first.
@@ -111,7 +113,8 @@ pub(super) struct Step {
     pub(super) by_own_w: [f64; 3],
 }
 
-/// Derivatives with respect to (theta, mass, third) and to W, from those with respect to (theta, dstar, third, u).
+/// Derivatives with respect to (theta, mass, third) and to W, from those with respect to (theta, dstar,
+/// third, u).
 pub(super) fn to_mass(row: [f64; 4], state: &State, c: f64) -> ([f64; 3], f64) {
     let [_, dstar, _, u] = *state;
     // dstar = m/u, u changes by c dm + W

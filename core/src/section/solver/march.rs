@@ -1,8 +1,8 @@
 //! Marching the boundary layer from the stagnation point down both sides and the wake, station by station.
 //!
-//! Each march solves every station for the speed that the rest of the flow gives it (`v`) and the local law of
-//! interaction, so that the equations of the layer hold everywhere before the coupled step is taken. A station that cannot be
-//! solved keeps what it had; its equations then stay in the coupled system.
+//! Each march solves every station for the speed that the rest of the flow gives it (`v`) and the local law
+//! of interaction, so that the equations of the layer hold everywhere before the coupled step is taken. A
+//! station that cannot be solved keeps what it had; its equations then stay in the coupled system.
 //!
 //! # References
 //! Veldman, AIAA J. 19(1), 1981: quasi-simultaneous interaction.
@@ -61,7 +61,7 @@ impl Layer {
             return;
         };
         match self.transition_part(side, station, &trial) {
-            None => self.state[node] = trial,
+            None => self.accept(node, Some(trial)),
             Some((part, forced)) => {
                 self.pass_transition(side, Transition { station, part, forced, trial }, drive, old);
             }
@@ -97,7 +97,8 @@ impl Layer {
         self.close(Kind::Laminar, Upstream::Station(&before, dx), drive, node, &guesses)
     }
 
-    /// Part of the interval before a station that is laminar, and whether a trip ends it; none without transition.
+    /// Part of the interval before a station that is laminar, and whether a trip ends it; none without
+    /// transition.
     fn transition_part(&self, side: usize, station: usize, trial: &State) -> Option<(f64, bool)> {
         if station == 0 {
             return None;
@@ -105,11 +106,12 @@ impl Layer {
         let nodes = &self.sides[side].nodes;
         let (before, gas) = (&self.state[nodes[station - 1]], &self.course.gas);
         let first = props(gas, &fixed::<0>(before), Kind::Laminar);
-        let free = (trial[2] >= self.course.n_crit).then(|| {
+        let n_crit = self.course.n_crit[side];
+        let free = (trial[2] >= n_crit).then(|| {
             let last = props(gas, &fixed::<0>(trial), Kind::Laminar);
             let dx = self.dx(nodes[station - 1], nodes[station]);
             let n1 = Dual::constant(before[2]);
-            critical_part(self.course.n_crit, n1, first.growth, last.growth, dx).v
+            critical_part(n_crit, n1, first.growth, last.growth, dx).v
         });
         let trip = self.sides[side].trip.filter(|&(at, _)| station >= at && first.re_theta.v > TRIP_RE_THETA);
         let trip = trip.map(|(at, part)| if station == at { part } else { 0.0 });
@@ -212,10 +214,16 @@ impl Layer {
         }
     }
 
+    /// Whether a solution lies farther from what a station has than a march may go.
+    fn leaps(&self, node: usize, state: &State) -> bool {
+        let own = &self.state[node];
+        (state[1] / own[1] - 1.0).abs() > self.leap || (state[0] / own[0] - 1.0).abs() > self.leap
+    }
+
     fn accept(&mut self, node: usize, found: Option<State>) {
         match found {
-            Some(state) => self.state[node] = state,
-            None => self.failed[node] = true,
+            Some(state) if !self.leaps(node, &state) => self.state[node] = state,
+            _ => self.failed[node] = true,
         }
     }
 }

@@ -73,8 +73,9 @@ fn validate_plate_turbulent_karman_schoenherr() {
     assert!(checked > 20);
 }
 
-/// Falkner and Skan (1931), Hartree (1937): friction vanishes at `beta = -0.1988` with `H = 4.03`; stagnation flow, `beta = 1`, has
-/// `H = 2.216`, `beta = -0.1` has `H = 2.802`. The closure is a fit: 5 % in H and 0.01 in beta at separation, 2 % in H elsewhere.
+/// Falkner and Skan (1931), Hartree (1937): friction vanishes at `beta = -0.1988` with `H = 4.03`; stagnation
+/// flow, `beta = 1`, has `H = 2.216`, `beta = -0.1` has `H = 2.802`. The closure is a fit: 5 % in H and 0.01
+/// in beta at separation, 2 % in H elsewhere.
 #[test]
 fn validate_similar_flows_falkner_skan() {
     let gas = Gas::new(1e6, 0.0);

@@ -1,12 +1,14 @@
-//! Potential flow about a section and its wake: vortices of linear strength on the outline, sources for the displacement of
-//! the boundary layer on outline and wake.
+//! Potential flow about a section and its wake: vortices of linear strength on the outline, sources for the
+//! displacement of the boundary layer on outline and wake.
 //!
-//! The stream function is constant on the outline, seen from inside. The strength of the vortices is then the speed of the surface,
-//! clockwise positive; the signed speed along the list of nodes is its negative. Sources are the growth of the signed mass
-//! defect along the arc, so that the influence of the mass defect does not depend on the stagnation point.
+//! The stream function is constant on the outline, seen from inside. The strength of the vortices is then the
+//! speed of the surface, clockwise positive; the signed speed along the list of nodes is its negative.
+//! Sources are the growth of the signed mass defect along the arc, so that the influence of the mass defect
+//! does not depend on the stagnation point.
 //!
 //! # References
-//! Drela, Lecture Notes in Engineering 54, 1989, pp. 1-12: stream-function formulation, open trailing edge, Kutta condition.
+//! Drela, Lecture Notes in Engineering 54, 1989, pp. 1-12: stream-function formulation, open trailing edge,
+//! Kutta condition.
 
 use super::dense::{Factors, Matrix};
 use super::singularity::{Cut, Element};
@@ -50,7 +52,8 @@ impl Strip {
         }
     }
 
-    /// Adds to `row` the effect of the mass defects of this strip; `effect` gives that of a half element for both its ends.
+    /// Adds to `row` the effect of the mass defects of this strip; `effect` gives that of a half element for
+    /// both its ends.
     pub(super) fn mass_row(&self, row: &mut [f64], effect: impl Fn(&Element) -> [f64; 2]) {
         let mut middles = vec![0.0; self.elements.len()];
         for (j, halves) in self.halves.iter().enumerate() {
@@ -155,7 +158,8 @@ impl Potential {
         gamma
     }
 
-    /// Strength of the vortices for a unit of each mass defect of a strip: nodes of the outline by nodes of the strip.
+    /// Strength of the vortices for a unit of each mass defect of a strip: nodes of the outline by nodes of
+    /// the strip.
     pub(super) fn mass_response(&self, strip: &Strip, cut: Cut) -> Matrix {
         let (n, m) = (self.count(), strip.nodes.len());
         let mut effect = Matrix::zeros(n, m);

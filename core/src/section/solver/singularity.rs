@@ -1,18 +1,19 @@
 //! Stream function and velocity of straight vortex and source elements of linear strength.
 //!
-//! An element runs along its own axis from its first end; `y` is to the left of it. Vortex strength is positive clockwise.
-//! All results are for the strengths at the two ends and hold the factor 1/(2 pi).
+//! An element runs along its own axis from its first end; `y` is to the left of it. Vortex strength is
+//! positive clockwise. All results are for the strengths at the two ends and hold the factor 1/(2 pi).
 //!
 //! # References
-//! Katz, Plotkin, "Low-Speed Aerodynamics", 2nd ed. 2001, chapter 10 (elements of linear strength); Drela, Lecture Notes in
-//! Engineering 54, 1989, pp. 1-12 (stream-function formulation).
+//! Katz, Plotkin, "Low-Speed Aerodynamics", 2nd ed. 2001, chapter 10 (elements of linear strength); Drela,
+//! Lecture Notes in Engineering 54, 1989, pp. 1-12 (stream-function formulation).
 
 use std::f64::consts::{PI, TAU};
 
 /// Heights below this, in chords, are on the element.
 const ON_ELEMENT: f64 = 1e-13;
 
-/// Distances below this, in chords, are at the end of the element: rounding must not decide the logarithm there.
+/// Distances below this, in chords, are at the end of the element: rounding must not decide the logarithm
+/// there.
 const AT_END: f64 = 1e-10;
 
 /// Where the angle seen from a source element jumps.

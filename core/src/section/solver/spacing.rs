@@ -12,7 +12,8 @@ const EDGE_PART: f64 = 0.35;
 const EDGE_REACH: f64 = 0.06;
 /// Spread of the smoothing of curvature, chords.
 const SMOOTHING: f64 = 0.004;
-/// Curvature counts fully beyond the second and not within the first of these distances from the edge, chords.
+/// Curvature counts fully beyond the second and not within the first of these distances from the edge,
+/// chords.
 const TAPER: [f64; 2] = [0.15, 0.35];
 
 /// Nodes from the upper trailing edge round the nose to the lower one.

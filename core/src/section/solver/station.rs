@@ -27,7 +27,8 @@ pub(super) enum Upstream<'a> {
     Stagnation(f64),
     /// A station in the same kind of layer, at a distance.
     Station(&'a State, f64),
-    /// A laminar station, with transition in the interval: the state there, the laminar trial, the part, the length.
+    /// A laminar station, with transition in the interval: the state there, the laminar trial, the part, the
+    /// length.
     Transition(&'a State, &'a State, f64, f64),
 }
 

@@ -2,55 +2,21 @@
 
 use std::ops::ControlFlow;
 
-use serde::{Deserialize, Serialize};
-
 use super::attempt::{Attempts, Solution};
 use super::closure::Gas;
 use super::layer::Course;
+use super::point::{Solved, State};
 use super::potential::Potential;
 use super::settings::{Settings, SolverError};
 use super::spacing;
 use crate::section::outline::Outline;
 
-/// Whether a point can be relied on.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Serialize, Deserialize)]
-#[serde(rename_all = "lowercase")]
-pub enum State {
-    /// The coupled equations hold to the tolerance.
-    Converged,
-    /// They do not, or the solution is not believable: the figures of the point are void.
-    Failed,
-    /// They do, but the suction at the nose is more than a laminar bubble there survives: the section has stalled from the nose
-    /// and the figures are void.
-    Stalled,
-}
-
-/// One point of a polar.
-#[derive(Debug, Clone, Copy, PartialEq, Serialize, Deserialize)]
-pub struct Solved {
-    /// Angle of attack from the chord line, degrees.
-    pub alpha_deg: f64,
-    /// Lift coefficient; NaN where it failed.
-    pub cl: f64,
-    /// Drag coefficient.
-    pub cd: f64,
-    /// Moment coefficient about the quarter chord, nose up positive.
-    pub cm: f64,
-    /// Transition on the upper side, in chords from the nose along the chord; 1 if it stays laminar.
-    pub xtr_upper: f64,
-    /// Transition on the lower side.
-    pub xtr_lower: f64,
-    /// Newton iterations, all attempts together.
-    pub iterations: usize,
-    /// Root mean square of what the speeds lack at the end.
-    pub residual: f64,
-    /// Whether the point converged.
-    pub state: State,
-}
-
 /// Failures in a row after which a direction of the sweep is given up: past the largest lift, and before it.
 const GIVE_UP: [usize; 2] = [3, 10];
-/// Nodes added for the second try at an angle that failed: what fails is often a transition point just at a node.
+/// Lift that falls below this angle, degrees, is transition running forward and not the stall.
+const STALL_DEG: f64 = 10.0;
+/// Nodes added for the second try at an angle that failed: what fails is often a transition point just at a
+/// node.
 const OTHER_NODES: usize = 9;
 /// A sweep in progress: call [`Sweep::advance`] until it gives nothing.
 #[derive(Debug, Clone)]
@@ -62,10 +28,18 @@ pub struct Sweep {
     start: usize,
     /// Position in the order: up from the start, then down from it.
     next: usize,
-    anchor: Option<Solution>,
-    last: Option<Solution>,
+    /// Index of the first angle that converged on the usual nodes.
+    anchor: Option<usize>,
+    /// Index of the latest.
+    last: Option<usize>,
     failures: usize,
-    points: Vec<Solved>,
+    /// Index of the angle just tried in the present direction.
+    latest: Option<usize>,
+    /// Points and flows on the usual nodes, by index of the angle.
+    points: Vec<Option<Solved>>,
+    solutions: Vec<Option<Solution>>,
+    /// Whether a failed angle was tried once more from the angle below and above.
+    mended: Vec<[bool; 2]>,
     /// Largest size of lift in the present direction.
     peak: f64,
 }
@@ -74,7 +48,8 @@ impl Sweep {
     /// Sets up the flow about an outline.
     ///
     /// # Errors
-    /// [`SolverError`] for settings or angles out of range, and for an outline about which no flow can be found.
+    /// [`SolverError`] for settings or angles out of range, and for an outline about which no flow can be
+    /// found.
     pub fn new(outline: &Outline, settings: &Settings, angles_deg: &[f64]) -> Result<Self, SolverError> {
         settings.check()?;
         check_angles(angles_deg)?;
@@ -85,7 +60,7 @@ impl Sweep {
         let (potential, other) = (flow(settings.nodes)?, flow(settings.nodes + OTHER_NODES)?);
         let course = Course {
             gas: Gas::new(settings.reynolds, settings.mach),
-            n_crit: settings.n_crit,
+            n_crit: [settings.n_crit; 2],
             trips: [settings.trip_upper, settings.trip_lower],
             body: potential.count(),
             gap: potential.gap(),
@@ -103,12 +78,16 @@ impl Sweep {
             anchor: None,
             last: None,
             failures: 0,
-            points: Vec::new(),
+            latest: None,
+            points: vec![None; angles_deg.len()],
+            solutions: vec![None; angles_deg.len()],
+            mended: vec![[false; 2]; angles_deg.len()],
             peak: 0.0,
         })
     }
 
-    /// Computes the next angle; nothing when the sweep is over.
+    /// Computes the next angle; nothing when the sweep is over. An angle that failed comes again when it is
+    /// tried once more.
     pub fn advance(&mut self) -> Option<Solved> {
         let count = self.angles_deg.len();
         let upward = count - self.start;
@@ -116,25 +95,29 @@ impl Sweep {
             self.next = upward;
         }
         if self.next == upward {
-            self.last.clone_from(&self.anchor);
-            (self.failures, self.peak) = (0, 0.0);
+            self.last = self.anchor;
+            (self.failures, self.peak, self.latest) = (0, 0.0, None);
         }
         if self.next >= count || self.gives_up() {
-            return None;
+            self.next = count;
+            return self.mend();
         }
         let index = if self.next < upward { self.start + self.next } else { count - 1 - self.next };
         self.next += 1;
-        let point = self.solve(self.angles_deg[index]);
+        let point = self.solve(index);
         self.failures = if point.state == State::Converged { 0 } else { self.failures + 1 };
-        self.points.push(point);
+        self.latest = Some(index);
+        self.points[index] = Some(point);
         Some(point)
     }
 
     /// Whether the present direction is not worth going on with.
     fn gives_up(&self) -> bool {
-        let lift = self.last.as_ref().map_or(0.0, |last| last.cl.abs());
-        let stalled = self.points.last().is_some_and(|p| p.state == State::Stalled);
-        let past = stalled || lift > 0.7 && lift < 0.98 * self.peak;
+        let lift = self.last.and_then(|i| self.solutions[i].as_ref()).map_or(0.0, |last| last.cl.abs());
+        let latest = self.latest.and_then(|i| self.points[i]);
+        let stalled = latest.is_some_and(|p| p.state == State::Stalled);
+        let steep = latest.is_some_and(|p| p.alpha_deg.abs() > STALL_DEG);
+        let past = stalled || steep && lift > 0.7 && lift < 0.98 * self.peak;
         self.failures >= GIVE_UP[usize::from(!past)]
     }
 
@@ -147,38 +130,76 @@ impl Sweep {
     /// The points so far, by rising angle.
     #[must_use]
     pub fn points(&self) -> Vec<Solved> {
-        let mut points = self.points.clone();
-        points.sort_by(|a, b| a.alpha_deg.total_cmp(&b.alpha_deg));
-        points
+        self.points.iter().flatten().copied().collect()
     }
 
-    fn solve(&mut self, alpha_deg: f64) -> Solved {
-        let mut attempts = Attempts::new([&self.potential, &self.other], &self.course, self.last.as_ref());
+    fn solve(&mut self, index: usize) -> Solved {
+        let alpha_deg = self.angles_deg[index];
+        let last = self.last.and_then(|i| self.solutions[i].as_ref());
+        let mut attempts = Attempts::new([&self.potential, &self.other], &self.course, last);
         let found = attempts.find(alpha_deg.to_radians());
         let (iterations, residual) = (attempts.iterations, attempts.residual);
-        let failed = Solved {
-            alpha_deg,
-            cl: f64::NAN,
-            cd: f64::NAN,
-            cm: f64::NAN,
-            xtr_upper: f64::NAN,
-            xtr_lower: f64::NAN,
-            iterations,
-            residual,
-            state: State::Failed,
+        let Some((solution, point)) = found else {
+            return Solved::void(alpha_deg, State::Failed, iterations, residual);
         };
-        let Some((solution, point)) = found else { return failed };
         if point.state == State::Stalled {
-            return Solved { state: State::Stalled, ..failed };
+            return Solved::void(alpha_deg, State::Stalled, iterations, residual);
         }
         self.peak = self.peak.max(solution.cl.abs());
         if solution.nodes() == self.course.body {
-            if self.anchor.is_none() {
-                self.anchor = Some(solution.clone());
-            }
-            self.last = Some(solution);
+            self.anchor.get_or_insert(index);
+            self.last = Some(index);
+            self.solutions[index] = Some(solution);
         }
         Solved { alpha_deg, iterations, residual, ..point }
+    }
+
+    /// Tries the next failed angle once more from a neighbour that has since converged; nothing when all are
+    /// tried.
+    fn mend(&mut self) -> Option<Solved> {
+        let (index, from) = self.to_mend()?;
+        self.mended[index][from] = true;
+        let alpha_deg = self.angles_deg[index];
+        let (below, above) = (&self.solutions[..index], &self.solutions[index + 1..]);
+        let (below, above) = (below.iter().rev(), above.iter());
+        let (last, beyond) = if from == 0 {
+            (below.flatten().next(), above.flatten().next())
+        } else {
+            (above.flatten().next(), below.flatten().next())
+        };
+        let mut attempts = Attempts::new([&self.potential, &self.other], &self.course, last);
+        let found = attempts.mend(alpha_deg.to_radians(), beyond);
+        let (iterations, residual) = (attempts.iterations, attempts.residual);
+        let point = match found {
+            Some((solution, point)) if point.state == State::Converged => {
+                self.solutions[index] = Some(solution);
+                Solved { alpha_deg, iterations, residual, ..point }
+            }
+            Some((_, point)) => Solved::void(alpha_deg, point.state, iterations, residual),
+            None => Solved::void(alpha_deg, State::Failed, iterations, residual),
+        };
+        self.points[index] = Some(point);
+        Some(point)
+    }
+
+    /// An angle that failed and the side (0 below, 1 above) of a neighbour not tried yet; neighbours towards
+    /// the start first.
+    fn to_mend(&self) -> Option<(usize, usize)> {
+        let count = self.angles_deg.len();
+        let failed = |i: usize| match self.points[i] {
+            Some(point) => point.state == State::Failed,
+            // Without a first flow nothing was found out about the angles beyond.
+            None => self.anchor.is_none_or(|at| at < self.start),
+        };
+        let open = |i: usize, from: usize| {
+            let at = if from == 0 { i.checked_sub(1) } else { Some(i + 1) };
+            let solved = at.and_then(|at| self.solutions.get(at)).is_some_and(Option::is_some);
+            (failed(i) && solved && !self.mended[i][from]).then_some((i, from))
+        };
+        let (above, below) = (self.start..count, (0..self.start).rev());
+        let inward = above.clone().map(|i| (i, 0)).chain(below.clone().map(|i| (i, 1)));
+        let outward = above.rev().map(|i| (i, 1)).chain(below.rev().map(|i| (i, 0)));
+        inward.chain(outward).find_map(|(i, from)| open(i, from))
     }
 }
 
@@ -196,7 +217,8 @@ fn check_angles(angles_deg: &[f64]) -> Result<(), SolverError> {
     })
 }
 
-/// Computes a whole polar. `watch` hears of every point with the counts of angles done and asked for, and may stop the sweep.
+/// Computes a whole polar. `watch` hears of every point with the counts of angles done and asked for, and may
+/// stop the sweep.
 ///
 /// Points are in rising order of angle. Angles beyond three failures in a row are not in the result.
 ///

@@ -1,4 +1,5 @@
-//! The potential flow against a closed form, the boundary layer against plates and similar flows, and whole polars.
+//! The potential flow against a closed form, the boundary layer against plates and similar flows, and whole
+//! polars.
 
 use std::ops::ControlFlow;
 
@@ -158,7 +159,8 @@ fn odd_outlines_come_to_an_end() {
         }
     }
 }
-/// At Re 80,000 and no incidence a solution exists whose wake widens without end and whose drag vanishes: it must not be taken.
+/// At Re 80,000 and no incidence a solution exists whose wake widens without end and whose drag vanishes: it
+/// must not be taken.
 #[test]
 fn drag_is_never_less_than_that_of_a_plate() {
     let section = naca_four_digit(0, 0, 0.12).expect("drawn");
@@ -171,4 +173,19 @@ fn drag_is_never_less_than_that_of_a_plate() {
         println!("{} {} {}", p.alpha_deg, p.cl, p.cd);
     }
     assert!(good.count() >= 15);
+}
+
+/// Where transition runs along a flat stretch within half a degree, angles from both sides fail; holding it finds them.
+#[test]
+fn transition_that_runs_along_a_side_is_found() {
+    let section =
+        crate::section::outline::arc_back(0.12, 0.10).expect("drawn").scaled_to(0.10).expect("scaled");
+    let angles: Vec<f64> = (-4..=8).map(|k| 0.5 * f64::from(k)).collect();
+    let points = polar(&section, &Settings::free(4e5, 4.0), &angles);
+    assert!(points.iter().all(|p| p.state == State::Converged), "{points:?}");
+    for pair in points.windows(2) {
+        assert!(pair[1].xtr_upper < pair[0].xtr_upper, "{pair:?}");
+    }
+    let between = points.iter().find(|p| p.alpha_deg == 1.5).expect("asked for");
+    assert!((0.1..0.55).contains(&between.xtr_upper), "{between:?}");
 }

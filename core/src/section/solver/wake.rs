@@ -1,15 +1,19 @@
-//! The wake: where it runs at an angle of attack, and how mass defects and its own curvature change the speeds.
+//! The wake: where it runs at an angle of attack, and how mass defects and its own curvature change the
+//! speeds.
 //!
-//! The wake follows the streamline of potential flow from the trailing edge; it is laid anew for each angle and then held.
+//! The wake follows the streamline of potential flow from the trailing edge; it is laid anew for each angle
+//! and then held.
 //!
 //! # References
-//! Lock, Williams, "Viscous-inviscid interactions in external aerodynamics", Prog. Aerospace Sci. 24, 1987: curvature of the wake.
+//! Lock, Williams, "Viscous-inviscid interactions in external aerodynamics", Prog. Aerospace Sci. 24, 1987:
+//! curvature of the wake.
 
 use super::dense::{Matrix, add_scaled, dot};
 use super::potential::{Potential, Strip, unit};
 use super::singularity::Cut;
 
-/// The flow at one angle of attack: signed speeds without boundary layer, and their change with the signed mass defects.
+/// The flow at one angle of attack: signed speeds without boundary layer, and their change with the signed
+/// mass defects.
 #[derive(Debug, Clone)]
 pub(super) struct Flow {
     pub(super) alpha_rad: f64,
@@ -53,9 +57,9 @@ impl Flow {
         Self { alpha_rad, still, by_mass, wake, by_swirl, course }
     }
 
-    /// Change of speed with mass defect, the curvature of the wake included: a curved wake carries less momentum than the flow
-    /// it stands for, which vortices of strength `-curvature (m + u theta)` make good. `shape` is the shape parameter of the
-    /// wake at its nodes, from which `u theta = m/H`.
+    /// Change of speed with mass defect, the curvature of the wake included: a curved wake carries less
+    /// momentum than the flow it stands for, which vortices of strength `-curvature (m + u theta)` make good.
+    /// `shape` is the shape parameter of the wake at its nodes, from which `u theta = m/H`.
     pub(super) fn influence(&self, shape: &[f64], reach: f64) -> Matrix {
         let mut influence = self.by_mass.clone();
         let body = influence.rows - shape.len();
@@ -99,27 +103,7 @@ fn interpolate(table: &[[f64; 2]], x: f64) -> f64 {
 /// Speeds for a unit of vortex strength at each node of the wake, the outline answering.
 fn swirl(potential: &Potential, wake: &Strip) -> Matrix {
     let (n, w) = (potential.count(), wake.nodes.len());
-    let mut effect = Matrix::zeros(n, w);
-    for (i, &p) in potential.body.nodes.iter().enumerate() {
-        let row = effect.row_mut(i);
-        for (j, element) in wake.elements.iter().enumerate() {
-            let stream = element.vortex_stream(p);
-            row[j] += stream[0];
-            row[j + 1] += stream[1];
-        }
-    }
-    let mut response = Matrix::zeros(n, w);
-    for j in 0..w {
-        let mut right: Vec<f64> = (0..n).map(|i| -effect.row(i)[j]).collect();
-        if potential.sharp {
-            right[n - 1] = 0.0;
-        }
-        // The vorticity of both sides runs on into that of the wake.
-        right.push(if j == 0 { 1.0 } else { 0.0 });
-        for (i, gamma) in potential.factors.solve(&right).into_iter().take(n).enumerate() {
-            response.row_mut(i)[j] = gamma;
-        }
-    }
+    let response = swirl_response(potential, wake);
     let mut speeds = Matrix::zeros(n + w, w);
     for i in 0..n {
         add_scaled(speeds.row_mut(i), -1.0, response.row(i));
@@ -143,6 +127,33 @@ fn swirl(potential: &Potential, wake: &Strip) -> Matrix {
         }
     }
     speeds
+}
+
+/// Strength of the vortices on the outline for a unit of vortex strength at each node of the wake.
+fn swirl_response(potential: &Potential, wake: &Strip) -> Matrix {
+    let (n, w) = (potential.count(), wake.nodes.len());
+    let mut effect = Matrix::zeros(n, w);
+    for (i, &p) in potential.body.nodes.iter().enumerate() {
+        let row = effect.row_mut(i);
+        for (j, element) in wake.elements.iter().enumerate() {
+            let stream = element.vortex_stream(p);
+            row[j] += stream[0];
+            row[j + 1] += stream[1];
+        }
+    }
+    let mut response = Matrix::zeros(n, w);
+    for j in 0..w {
+        let mut right: Vec<f64> = (0..n).map(|i| -effect.row(i)[j]).collect();
+        if potential.sharp {
+            right[n - 1] = 0.0;
+        }
+        // The vorticity of both sides runs on into that of the wake.
+        right.push(if j == 0 { 1.0 } else { 0.0 });
+        for (i, gamma) in potential.factors.solve(&right).into_iter().take(n).enumerate() {
+            response.row_mut(i)[j] = gamma;
+        }
+    }
+    response
 }
 
 /// Speed along the wake at its node `i`, and the effect on it of every mass defect.
@@ -174,7 +185,8 @@ fn wake_row(
 /// Length of the wake, chords.
 const WAKE_LENGTH: f64 = 1.2;
 
-/// Marches the wake along the streamline by the midpoint rule, its first step along the bisector of the trailing edge.
+/// Marches the wake along the streamline by the midpoint rule, its first step along the bisector of the
+/// trailing edge.
 fn wake_nodes(potential: &Potential, gamma: &[f64], alpha_rad: f64) -> Vec<[f64; 2]> {
     let n = potential.count();
     let (a, b) = (potential.body.nodes[0], potential.body.nodes[n - 1]);
