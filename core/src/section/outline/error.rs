@@ -36,7 +36,9 @@ pub enum OutlineError {
         bytes: usize,
     },
     /// A line after the name is not a pair of numbers.
-    #[error("line {line}: `{text}` is not a pair of numbers x y")]
+    #[error(
+        "line {line}: `{text}` is not a pair of numbers x y; one line for a name may stand before the first pair"
+    )]
     NotAPair {
         /// Line counted from 1.
         line: usize,

@@ -1,8 +1,9 @@
 //! Families of sections drawn from formulas or from published ordinates.
 //!
 //! # References
-//! Jacobs, Ward, Pinkerton, NACA Report 460 (1933): four-digit sections. Lindsey, Stevenson, Daley, NACA TN 1546 (1948):
-//! 16-series thickness. Abbott, von Doenhoff, Stivers, NACA Report 824 (1945): mean line a = 1. Coefficients from memory.
+//! Jacobs, Ward, Pinkerton, NACA Report 460 (1933): four-digit sections. Lindsey, Stevenson, Daley, NACA TN
+//! 1546 (1948): 16-series thickness. Abbott, von Doenhoff, Stivers, NACA Report 824 (1945): mean line a = 1.
+//! Coefficients from memory.
 
 use std::f64::consts::PI;
 
@@ -105,7 +106,8 @@ pub fn naca_16_series(design_cl: f64, thickness_ratio: f64) -> Result<Outline, O
 
 /// A flat face with a circular-arc back, its nose rounded by a circle that touches face and back.
 ///
-/// The trailing edge is sharp. `nose_part` is the radius of the nose over the thickness; 0 leaves the nose sharp.
+/// The trailing edge is sharp. `nose_part` is the radius of the nose over the thickness; 0 leaves the nose
+/// sharp.
 ///
 /// # Errors
 /// [`OutlineError::Figure`] outside thickness 2 % to 40 %, nose part 0 to 0.2.
@@ -149,8 +151,8 @@ pub fn raf_6() -> Result<Outline, OutlineError> {
 
 /// Draws a table of ordinates (station, upper, lower, in hundredths), flat behind `flat_from`.
 ///
-/// The nose is round, so that ordinates run smoothly against the signed square root of the station: one cubic spline runs
-/// through the upper side and round the nose to where the flat face begins.
+/// The nose is round, so that ordinates run smoothly against the signed square root of the station: one cubic
+/// spline runs through the upper side and round the nose to where the flat face begins.
 fn from_table(name: &str, rows: &[[f64; 3]], flat_from: f64) -> Result<Outline, OutlineError> {
     let lower = rows.iter().rev().filter(|row| row[0] > 0.0 && row[0] / 100.0 <= flat_from + 1e-9);
     let mut knots: Vec<[f64; 2]> = lower.map(|row| [-(row[0] / 100.0).sqrt(), row[2] / 100.0]).collect();

@@ -1,11 +1,13 @@
 //! The outline of a section: reading, checking, measuring and scaling it.
 //!
-//! An [`Outline`] always stands in the frame of its chord line: chord 1, nose at (0, 0), middle of the trailing edge
-//! at (1, 0), points from the upper trailing edge round the nose to the lower trailing edge. The chord line is the
-//! line from the middle of the trailing edge to the point of the outline farthest from it; section angles in this crate
-//! are measured from it. [`Outline::face_angle_rad`] gives the way to the flat face that carvers measure from.
+//! An [`Outline`] always stands in the frame of its chord line: chord 1, nose at (0, 0), middle of the
+//! trailing edge at (1, 0), points from the upper trailing edge round the nose to the lower trailing edge.
+//! The chord line is the line from the middle of the trailing edge to the point of the outline farthest from
+//! it; section angles in this crate are measured from it. [`Outline::face_angle_rad`] gives the way to the
+//! flat face that carvers measure from.
 //!
-//! Limits: the outline is single, closed but for the trailing edge (at most 6 % of the chord open), 1 % to 60 % thick.
+//! Limits: the outline is single, closed but for the trailing edge (at most 6 % of the chord open), 1 % to 60
+//! % thick.
 
 mod check;
 mod edge;
@@ -127,20 +129,20 @@ impl Outline {
 
     /// The same section at another thickness ratio.
     ///
-    /// A section with a flat face keeps the face and has its ordinates from the face multiplied, as propeller sections are
-    /// drawn; any other keeps its camber line and has its ordinates from that line multiplied.
+    /// A section with a flat face keeps the face and has its ordinates from the face multiplied, as propeller
+    /// sections are drawn; any other keeps its camber line and has its ordinates from that line multiplied.
     ///
     /// # Errors
-    /// [`OutlineError::Thickness`] outside 1 % to 60 %, [`OutlineError::Undercut`] if the sides are not single-valued, and
-    /// the checks of the new outline.
+    /// [`OutlineError::Thickness`] outside 1 % to 60 %, [`OutlineError::Undercut`] if the sides are not
+    /// single-valued, and the checks of the new outline.
     pub fn scaled_to(&self, thickness_ratio: f64) -> Result<Self, OutlineError> {
         scale::scaled_to(self, thickness_ratio)
     }
 
     /// The same section with its trailing edge left `thickness` chords thick, as carved edges are.
     ///
-    /// The thickness is added behind the thickest place, with the square of the distance from it: on the back alone where the
-    /// section has a flat face, on both sides otherwise.
+    /// The thickness is added behind the thickest place, with the square of the distance from it: on the back
+    /// alone where the section has a flat face, on both sides otherwise.
     ///
     /// # Errors
     /// [`OutlineError::Figure`] for less than the outline has or more than 5 % of the chord.

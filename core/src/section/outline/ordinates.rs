@@ -23,9 +23,10 @@ pub(crate) const CLARK_Y: &[[f64; 3]] = &[
     [100.0, 0.12, 0.0],
 ];
 
-/// RAF 6 at 10 % thickness: the usual propeller table of ordinates over the greatest thickness (2.5 %: 0.41 ... 90 %: 0.35),
-/// nose radius 0.10 and edge thickness 0.08 of the thickness; from memory of tables in propeller textbooks (Weick, "Aircraft
-/// Propeller Design", 1930). The rounded nose ahead of 2.5 % is drawn here from the radius, not from a table.
+/// RAF 6 at 10 % thickness: the usual propeller table of ordinates over the greatest thickness (2.5 %: 0.41
+/// ... 90 %: 0.35), nose radius 0.10 and edge thickness 0.08 of the thickness; from memory of tables in
+/// propeller textbooks (Weick, "Aircraft Propeller Design", 1930). The rounded nose ahead of 2.5 % is drawn
+/// here from the radius, not from a table.
 pub(crate) const RAF_6: &[[f64; 3]] = &[
     [0.0, 1.0, 1.0],
     [0.30, 1.95, 0.28],

@@ -1,8 +1,8 @@
 //! Reading a list of coordinates.
 //!
-//! One point `x y` on a line, divided by blanks, tabs, commas or semicolons; a name may stand on the lines before
-//! the first pair; text after `#` is skipped. Either one list round the section, from the trailing edge over
-//! one side to the nose and back along the other, or two blocks divided by an empty line, each from
+//! One point `x y` on a line, divided by blanks, tabs, commas or semicolons; a name may stand on one line
+//! before the first pair; text after `#` is skipped. Either one list round the section, from the trailing
+//! edge over one side to the nose and back along the other, or two blocks divided by an empty line, each from
 //! nose to trailing edge; the two blocks may be headed by a line with their two counts.
 
 use super::error::{OutlineError, Place};
@@ -60,14 +60,20 @@ fn blocks(text: &str) -> Result<(String, Vec<Vec<Row>>), OutlineError> {
             }
         } else if let Some(pair) = pair(line) {
             blocks[..].last_mut().into_iter().for_each(|block| block.push((pair, index + 1)));
-        } else if begun {
+        } else if begun || !name.is_empty() || figures(line) {
             let text = line.chars().take(40).collect();
             return Err(OutlineError::NotAPair { line: index + 1, text });
-        } else if name.is_empty() {
+        } else {
             name = line.chars().take(80).collect();
         }
     }
     Ok((name, blocks))
+}
+
+/// Whether a line is nothing but figures with a decimal point among them: part of the list, and no name.
+fn figures(line: &str) -> bool {
+    line.contains('.')
+        && line.chars().all(|c| c.is_ascii_digit() || c.is_whitespace() || ".,;+-eE".contains(c))
 }
 
 /// Two numbers and nothing else.
@@ -103,7 +109,8 @@ fn split_by_count(blocks: &mut Vec<Vec<Row>>, counts: [usize; 2], line: usize) -
     Ok(())
 }
 
-/// One list round the section from one or two blocks; two blocks that run nose to trailing edge meet at the nose.
+/// One list round the section from one or two blocks; two blocks that run nose to trailing edge meet at the
+/// nose.
 fn join(mut blocks: Vec<Vec<Row>>) -> Vec<Row> {
     let outward = |block: &Vec<Row>| match (block.first(), block.last()) {
         (Some(a), Some(b)) => block.len() > 1 && a.0[0] < b.0[0],
@@ -144,6 +151,12 @@ mod tests {
     fn a_stray_word_is_named_with_its_line() {
         let error = read("1 0\n0.5 0.1\nnonsense here\n").expect_err("refused");
         assert_eq!(error, OutlineError::NotAPair { line: 3, text: "nonsense here".into() });
+        let error = read("A section\n1.0 x\n0.5 0.1\n0 0\n").expect_err("one name line");
+        assert_eq!(error, OutlineError::NotAPair { line: 2, text: "1.0 x".into() });
+        for garbled in ["1.0\n0.5 0.1\n", "1.0 0.0 0.2\n0.5 0.1\n"] {
+            assert!(matches!(read(garbled), Err(OutlineError::NotAPair { line: 1, .. })), "{garbled}");
+        }
+        assert_eq!(read("2412\n1 0\n0 0\n").expect("a name of figures").name, "2412");
         assert!(read("9 9\n0 0\n1 0\n").is_ok(), "whole numbers far from the length are points");
     }
 }

@@ -5,7 +5,8 @@ use super::error::{OutlineError, Place};
 use super::measure::{interpolate, sides};
 use super::{Face, Outline};
 
-/// Passes of the correction that brings the thickness square to the (moved) chord line to the ratio asked for.
+/// Passes of the correction that brings the thickness square to the (moved) chord line to the ratio asked
+/// for.
 const PASSES: usize = 4;
 
 /// See [`Outline::scaled_to`].

@@ -1,3 +1,5 @@
+use proptest::prelude::*;
+
 use super::*;
 
 fn ellipse(count: usize, ratio: f64) -> Vec<[f64; 2]> {
@@ -164,5 +166,49 @@ fn an_edge_thinner_than_drawn_or_absurd_is_refused() {
     let drawn = raf_6().expect("drawn");
     for edge in [0.001, 0.2, -0.01, f64::NAN] {
         assert!(matches!(drawn.with_edge_thickness(edge), Err(OutlineError::Figure { .. })), "{edge}");
+    }
+}
+
+proptest! {
+    #[test]
+    fn no_text_panics(text in "\\PC{0,200}") {
+        let _ = Outline::read(&text);
+    }
+
+    /// Lists of figures, with repeats, gaps, words and figures without bound: an outline whose measures are finite, or an error.
+    #[test]
+    fn no_list_of_figures_panics(
+        lines in prop::collection::vec("(-?[01](\\.[0-9]{1,4})? -?0(\\.[0-9]{1,4})?)|1 0|0 0||NaN 0|1e999 1|x|9", 0..60),
+    ) {
+        if let Ok(outline) = Outline::read(&lines.join("\n")) {
+            let m = outline.measures();
+            prop_assert!(m.area.is_finite() && m.thickness_ratio.is_finite() && m.nose_radius.is_finite());
+        }
+    }
+
+    /// A fair section with a few of its points moved, repeated or struck out.
+    #[test]
+    fn no_marred_section_panics(
+        marks in prop::collection::vec((0..81_usize, -2.0..2.0_f64, -2.0..2.0_f64, 0..3_u8), 0..6),
+        size in -6.0..6.0_f64,
+    ) {
+        let mut points = ellipse(80, 0.12);
+        for (at, x, y, how) in marks {
+            let at = at.min(points.len() - 1);
+            match how {
+                0 => points[at] = [x, y],
+                1 => points.insert(at, points[at]),
+                _ => drop(points.remove(at)),
+            }
+        }
+        for p in &mut points {
+            *p = p.map(|v| v * 10_f64.powf(size));
+        }
+        if let Ok(outline) = Outline::from_points("", &points) {
+            prop_assert!(outline.measures().area.is_finite());
+            if let Ok(scaled) = outline.scaled_to(0.1) {
+                prop_assert!(scaled.measures().area.is_finite());
+            }
+        }
     }
 }
