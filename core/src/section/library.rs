@@ -112,7 +112,8 @@ fn one_set(packed: &PackedFamily, n: f64) -> Option<Family> {
 fn polars(packed: &PackedFamily) -> Vec<(&PackedPolar, Vec<PolarPoint>)> {
     let (cl, cd) = (packed.cl.unpack(CL_STEPS), packed.cd.unpack(CD_STEPS));
     let alpha = packed.alpha.unpack(ALPHA_STEPS).into_iter();
-    let mut rows = alpha.zip(cl).zip(cd).map(|((alpha_deg, cl), cd)| PolarPoint { alpha_deg, cl, cd });
+    let mut rows =
+        alpha.zip(cl).zip(cd).map(|((alpha_deg, cl), cd)| PolarPoint { alpha_deg, cl, cd, cm: None });
     packed.polars.iter().map(|head| (head, rows.by_ref().take(head.points).collect())).collect()
 }
 

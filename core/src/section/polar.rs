@@ -14,6 +14,10 @@ pub struct PolarPoint {
     pub cl: f64,
     /// Drag coefficient, above zero.
     pub cd: f64,
+    /// Moment coefficient about the quarter chord, nose up positive; kept where it is known, nothing here is
+    /// computed from it.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub cm: Option<f64>,
 }
 
 /// Lift and drag of one section at one Reynolds number, by rising angle of attack.
@@ -41,7 +45,8 @@ pub const MOST_POINTS: usize = 4_000;
 /// Most polars a section may have.
 pub const MOST_POLARS: usize = 400;
 
-/// What is wrong with a section's tables. `place` is a path below the section, such as `polars[2].points[7].cd`.
+/// What is wrong with a section's tables. `place` is a path below the section, such as
+/// `polars[2].points[7].cd`.
 #[derive(Clone, Debug, Error, PartialEq)]
 #[error("{place}: {found}; allowed is {allowed}")]
 pub struct TableError {
@@ -116,6 +121,7 @@ fn check_point(at: &str, p: &PolarPoint) -> Result<(), TableError> {
         ("alpha_deg", p.alpha_deg, (-180.0..=180.0).contains(&p.alpha_deg), "−180 to 180"),
         ("cl", p.cl, p.cl.abs() <= 10.0, "−10 to 10"),
         ("cd", p.cd, p.cd > 0.0 && p.cd <= 10.0, "above 0, up to 10"),
+        ("cm", p.cm.unwrap_or(0.0), p.cm.is_none_or(|cm| cm.abs() <= 10.0), "−10 to 10"),
     ];
     match rules.iter().find(|(_, _, ok, _)| !ok) {
         Some((name, value, _, allowed)) => Err(TableError::new(format!("{at}.{name}"), value, *allowed)),

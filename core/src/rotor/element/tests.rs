@@ -17,7 +17,7 @@ fn plate_polar() -> Family {
         let cl = w * linear + (1.0 - w) * 0.95 * (2.0 * a).sin();
         let cd =
             w * (0.0085 + 0.012 * (linear - 0.35).powi(2)) + (1.0 - w) * (0.0085 + 1.9 * a.sin().powi(2));
-        PolarPoint { alpha_deg, cl, cd }
+        PolarPoint { alpha_deg, cl, cd, cm: None }
     };
     let points = (-360..=360).map(point).collect();
     Family::new(About::default(), &[Polar { reynolds: None, mach: 0.0, thickness_ratio: None, points }])

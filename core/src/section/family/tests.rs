@@ -8,7 +8,7 @@ fn flat(thickness: Option<f64>, reynolds: Option<f64>, slope: f64, cd: f64) -> P
     let points = (-20..=24)
         .map(|i| {
             let alpha_deg = f64::from(i) * 0.5;
-            PolarPoint { alpha_deg, cl: slope * alpha_deg, cd }
+            PolarPoint { alpha_deg, cl: slope * alpha_deg, cd, cm: None }
         })
         .collect();
     Polar { reynolds, mach: 0.0, thickness_ratio: thickness, points }

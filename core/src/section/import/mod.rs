@@ -1,11 +1,12 @@
 //! Measured tables as comma-separated text.
 //!
-//! A line of headings names the columns, in any order: `alpha_deg` or `alpha_rad`, `cl`, `cd` are needed; `cm`, `reynolds`, `mach` and
-//! `thickness_ratio` may be there. A unit stands in the heading (`alpha [deg]`, `thickness [%]`, `reynolds [thousand]`). Columns
-//! are divided by commas, semicolons or tabs; with semicolons or tabs decimals may have a comma. Lines that begin with `#` and
-//! empty lines are skipped. Rows of the same thickness, Reynolds and Mach number make a polar, by rising angle.
+//! A line of headings names the columns, in any order: `alpha_deg` or `alpha_rad`, `cl`, `cd` are needed;
+//! `cm`, `reynolds`, `mach` and `thickness_ratio` may be there. A unit stands in the heading (`alpha [deg]`,
+//! `thickness [%]`, `reynolds [thousand]`). Columns are divided by commas, semicolons or tabs; with
+//! semicolons or tabs decimals may have a comma. Lines that begin with `#` and empty lines are skipped. Rows
+//! of the same thickness, Reynolds and Mach number make a polar, by rising angle.
 //!
-//! Moments are checked and not kept: nothing here uses them yet.
+//! Moments are kept with the points; nothing here is computed from them.
 
 mod error;
 mod header;

@@ -37,8 +37,8 @@ impl Reader<'_> {
             alpha_deg: need(Quantity::Alpha)?,
             cl: need(Quantity::Cl)?,
             cd: need(Quantity::Cd)?,
+            cm: at(Quantity::Cm)?,
         };
-        at(Quantity::Cm)?;
         let of = [at(Quantity::Thickness)?, at(Quantity::Reynolds)?, at(Quantity::Mach)?];
         Ok(Row { line, point, of })
     }

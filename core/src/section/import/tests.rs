@@ -12,6 +12,7 @@ fn message(text: &str) -> String {
 #[test]
 fn headings_units_and_separators_give_the_same_polar() {
     let expected = read(GOOD, "").unwrap().table.polars;
+    assert!(expected[0].points.iter().all(|p| p.cm == Some(-0.05)));
     let semicolons = GOOD
         .replace(',', ";")
         .replace('.', ",")
@@ -76,6 +77,7 @@ fn every_fault_is_told_with_its_place() {
         (swap("\n4,", "\n1,"), "line 5, column 1 (alpha): 1 degrees follows 2 degrees of line 4"),
         (swap("\n4,", "\n0,"), "line 5, column 1 (alpha): 0 degrees again, as on line 3"),
         (swap("\n4,", "\n400,"), "line 5, column 1 (alpha): \"400\""),
+        (swap("-0.05", "x"), "line 2, column 4 (cm): \"x\"; allowed is a number"),
         (swap("2e5", "5"), "line 2, column 5 (reynolds): \"5\"; allowed is 100 to 1e9"),
         (swap("2e5", "2e5,7"), "line 2: 6 columns; the headings have 5"),
         (swap("2e5", "3e5"), "the polar that begins on line 2: 1 rows"),

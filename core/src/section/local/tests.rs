@@ -8,7 +8,7 @@ use super::*;
 fn family() -> Family {
     let point = |i: i32| {
         let alpha_deg = f64::from(i) * 0.5;
-        PolarPoint { alpha_deg, cl: 0.1 * alpha_deg.clamp(-8.0, 10.0), cd: 0.01 }
+        PolarPoint { alpha_deg, cl: 0.1 * alpha_deg.clamp(-8.0, 10.0), cd: 0.01, cm: None }
     };
     let points = (-20..=60).map(point).collect();
     let about = About { korn_factor: 0.87, ..About::default() };
@@ -36,8 +36,8 @@ fn lift_grows_by_prandtl_and_glauert_below_drag_divergence() {
     }
 }
 
-/// Korn and Lock (as in W. H. Mason, *Configuration Aerodynamics*; from memory): with ka 0.87, t/c 0.12 and no lift Mdd is 0.75,
-/// where by definition dCd/dM = 0.1 and the rise is 20 (0.1/80)^(4/3) = 0.00269.
+/// Korn and Lock (as in W. H. Mason, *Configuration Aerodynamics*; from memory): with ka 0.87, t/c 0.12 and
+/// no lift Mdd is 0.75, where by definition dCd/dM = 0.1 and the rise is 20 (0.1/80)^(4/3) = 0.00269.
 #[test]
 fn drag_rises_by_lock_s_law() {
     let f = family();

@@ -1,9 +1,9 @@
 //! Polars of an outline, made into the tables of a section.
 //!
-//! A [`Plan`] is an outline drawn at each thickness ratio asked for, with the carver's departures from the drawing (a blunt trailing
-//! edge, a rough or taped leading edge), and one task for each thickness and Reynolds number at Mach 0. Tasks are independent. Only points
-//! that converged go into the table; how many did not is said in its origin. A polar with fewer than five such points is left out,
-//! and said.
+//! A [`Plan`] is an outline drawn at each thickness ratio asked for, with the carver's departures from the
+//! drawing (a blunt trailing edge, a rough or taped leading edge), and one task for each thickness and
+//! Reynolds number at Mach 0. Tasks are independent. Only points that converged go into the table; how many
+//! did not is said in its origin. A polar with fewer than five such points is left out, and said.
 
 mod compare;
 mod error;
@@ -74,7 +74,12 @@ impl Made {
     pub fn polar(&self) -> Option<Polar> {
         let points: Vec<PolarPoint> = self
             .converged()
-            .map(|p| PolarPoint { alpha_deg: p.alpha_deg, cl: rounded(p.cl, 1e5), cd: rounded(p.cd, 1e6) })
+            .map(|p| PolarPoint {
+                alpha_deg: p.alpha_deg,
+                cl: rounded(p.cl, 1e5),
+                cd: rounded(p.cd, 1e6),
+                cm: Some(rounded(p.cm, 1e4)),
+            })
             .collect();
         (points.len() >= FEWEST_POINTS).then_some(Polar {
             reynolds: Some(self.reynolds),
@@ -100,7 +105,8 @@ fn within(what: &'static str, found: f64, [least, most]: [f64; 2]) -> Result<(),
 }
 
 impl Plan {
-    /// Draws the outline as asked and lays out the tasks: thickness by thickness, each by rising Reynolds number.
+    /// Draws the outline as asked and lays out the tasks: thickness by thickness, each by rising Reynolds
+    /// number.
     ///
     /// # Errors
     /// [`MakeError`] for a request out of range and an outline that cannot be drawn so.
@@ -163,8 +169,8 @@ impl Plan {
     /// Computes one polar. `watch` hears of every angle and may stop it.
     ///
     /// # Errors
-    /// [`MakeError::Solver`] when no flow can be found about the outline or `watch` breaks off, [`MakeError::Request`] for a
-    /// task that is not below [`Plan::count`].
+    /// [`MakeError::Solver`] when no flow can be found about the outline or `watch` breaks off,
+    /// [`MakeError::Request`] for a task that is not below [`Plan::count`].
     pub fn run(
         &self,
         task: usize,
@@ -222,7 +228,8 @@ fn settings(request: &Request, reynolds: f64) -> Settings {
     }
 }
 
-/// Makes all polars of a request one after the other. `watch` hears of every angle with the number of the task.
+/// Makes all polars of a request one after the other. `watch` hears of every angle with the number of the
+/// task.
 ///
 /// # Errors
 /// As [`Plan::new`], [`Plan::run`] and [`Plan::table`].
