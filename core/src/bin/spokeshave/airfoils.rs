@@ -1,4 +1,5 @@
-//! `spokeshave airfoils`: computes the tables of the section families anew, by the section solver.
+//! `spokeshave airfoils`: computes the tables of the section families anew, by the section solver, to write them or to
+//! compare them with the present ones.
 //!
 //! The files are the same bit for bit from run to run: the sweeps are independent, their order in the files is fixed, and no
 //! figure depends on time or on the count of threads.
@@ -29,6 +30,15 @@ pub(crate) struct Args {
     /// Compute the tables and write them over the present ones
     #[arg(long)]
     rebuild: bool,
+    /// Compute the tables and say where the present ones differ
+    #[arg(long, conflicts_with = "rebuild")]
+    check: bool,
+    /// With --check: only this thickness ratio
+    #[arg(long, value_name = "T", requires = "check")]
+    thickness: Option<f64>,
+    /// With --check: only this Reynolds number
+    #[arg(long, value_name = "RE", requires = "check")]
+    re: Option<f64>,
     /// Only this family, by name
     #[arg(long, value_name = "FAMILY")]
     only: Option<String>,
@@ -47,15 +57,19 @@ pub(crate) fn run(args: &Args) -> Outcome {
         let names: Vec<&str> = CATALOGUE.iter().map(|e| e.name).collect();
         return Err(Stop::BadInput(format!("no family of that name: {} are known", names.join(", "))));
     }
+    if args.check {
+        let same: Result<Vec<bool>, Stop> = wanted.into_iter().map(|entry| check(entry, args)).collect();
+        return Ok(same?.into_iter().all(|same| same));
+    }
     if !args.rebuild {
         for entry in wanted {
             println!("{:<12} {}", entry.name, entry.title);
         }
-        println!("\nAdd --rebuild to compute their tables anew: some minutes for all.");
+        println!("\nAdd --rebuild to compute their tables anew, --check to compare: half an hour for all.");
         return Ok(true);
     }
     for entry in wanted {
-        rebuild(entry, &args.folder.join(entry.name), args.threads.clamp(1, 64))?;
+        rebuild(entry, &args.folder.join(entry.name), args.threads)?;
     }
     Ok(true)
 }
@@ -84,9 +98,7 @@ fn angles_deg() -> Vec<f64> {
 }
 
 fn rebuild(entry: &Entry, folder: &Path, threads: usize) -> Result<(), Stop> {
-    let base = (entry.draw)().map_err(|e| Stop::BadInput(format!("{}: {e}", entry.name)))?;
-    let drawn: Result<Vec<Outline>, _> = entry.thickness.iter().map(|&t| base.scaled_to(t)).collect();
-    let drawn = drawn.map_err(|e| Stop::BadInput(format!("{}: {e}", entry.name)))?;
+    let (base, drawn) = draw(entry)?;
     let tasks = tasks(entry.thickness);
     let polars = compute(entry, &tasks, &drawn, threads)?;
     let share = Share::of(&tasks, &polars);
@@ -101,6 +113,45 @@ fn rebuild(entry: &Entry, folder: &Path, threads: usize) -> Result<(), Stop> {
     write("family.json", record::family(entry, &drawn, &share))?;
     println!("{}: {share}", entry.name);
     Ok(())
+}
+
+/// The outline of a family as defined, and at each thickness of its tables.
+fn draw(entry: &Entry) -> Result<(Outline, Vec<Outline>), Stop> {
+    let bad = |e| Stop::BadInput(format!("{}: {e}", entry.name));
+    let base = (entry.draw)().map_err(bad)?;
+    let drawn: Result<Vec<Outline>, _> = entry.thickness.iter().map(|&t| base.scaled_to(t)).collect();
+    Ok((base, drawn.map_err(bad)?))
+}
+
+/// Computes tables and compares their rows with those of the files, byte for byte; whether all are the same.
+fn check(entry: &Entry, args: &Args) -> Outcome {
+    let path = args.folder.join(entry.name).join("polars.csv");
+    let present =
+        fs::read_to_string(&path).map_err(|e| Stop::BadInput(format!("{}: {e}", path.display())))?;
+    let asked = |task: &Task| {
+        args.thickness.is_none_or(|t| t == task.thickness_ratio)
+            && args.re.is_none_or(|re| re == task.settings.reynolds)
+    };
+    let tasks: Vec<Task> = tasks(entry.thickness).into_iter().filter(asked).collect();
+    if tasks.is_empty() {
+        return Err(Stop::BadInput(format!(
+            "{}: no table of that thickness and Reynolds number",
+            entry.name
+        )));
+    }
+    let polars = compute(entry, &tasks, &draw(entry)?.1, args.threads)?;
+    let mut other = 0;
+    for (task, points) in tasks.iter().zip(&polars) {
+        let head = record::head(task);
+        let rows: String =
+            present.lines().filter(|row| row.starts_with(&head)).map(|row| format!("{row}\n")).collect();
+        if rows != record::rows(task, points) {
+            println!("{}: the polar {head} is another one", entry.name);
+            other += 1;
+        }
+    }
+    println!("{}: {} of {} polars are the same", entry.name, tasks.len() - other, tasks.len());
+    Ok(other == 0)
 }
 
 /// Runs all sweeps, some at a time; the results stand in the order of the tasks.
@@ -129,7 +180,7 @@ fn compute(
         }
     };
     std::thread::scope(|scope| {
-        let running: Vec<_> = (0..threads).map(|_| scope.spawn(worker)).collect();
+        let running: Vec<_> = (0..threads.clamp(1, 64)).map(|_| scope.spawn(worker)).collect();
         running.into_iter().try_for_each(|thread| {
             thread.join().unwrap_or_else(|_| Err(Stop::BadInput(format!("{name}: a sweep broke off"))))
         })

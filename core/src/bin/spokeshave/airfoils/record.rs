@@ -81,22 +81,29 @@ pub(crate) fn outline(entry: &Entry, base: &Outline) -> String {
 
 /// `polars.csv`: a failed row has no figures.
 pub(crate) fn polars(tasks: &[Task], polars: &[Vec<Solved>]) -> String {
-    let mut text =
-        String::from("thickness_ratio,reynolds,mach,n_crit,alpha_deg,cl,cd,cm,xtr_upper,xtr_lower,state\n");
-    for (task, points) in tasks.iter().zip(polars) {
-        let Settings { reynolds, mach, n_crit, .. } = task.settings;
-        for p in points {
-            let _ = write!(text, "{},{reynolds},{mach},{n_crit},{},", task.thickness_ratio, p.alpha_deg);
-            let _ = match p.state {
-                State::Converged => writeln!(
-                    text,
-                    "{:.4},{:.5},{:.4},{:.3},{:.3},ok",
-                    p.cl, p.cd, p.cm, p.xtr_upper, p.xtr_lower
-                ),
-                State::Failed => writeln!(text, ",,,,,failed"),
-                State::Stalled => writeln!(text, ",,,,,stalled"),
-            };
-        }
+    let heading = "thickness_ratio,reynolds,mach,n_crit,alpha_deg,cl,cd,cm,xtr_upper,xtr_lower,state\n";
+    let tables = tasks.iter().zip(polars).map(|(task, points)| rows(task, points));
+    std::iter::once(heading.to_string()).chain(tables).collect()
+}
+
+/// What all rows of a polar begin with.
+pub(crate) fn head(task: &Task) -> String {
+    let Settings { reynolds, mach, n_crit, .. } = task.settings;
+    format!("{},{reynolds},{mach},{n_crit},", task.thickness_ratio)
+}
+
+/// The rows of one polar.
+pub(crate) fn rows(task: &Task, points: &[Solved]) -> String {
+    let (head, mut text) = (head(task), String::new());
+    for p in points {
+        let _ = write!(text, "{head}{},", p.alpha_deg);
+        let _ = match p.state {
+            State::Converged => {
+                writeln!(text, "{:.4},{:.5},{:.4},{:.3},{:.3},ok", p.cl, p.cd, p.cm, p.xtr_upper, p.xtr_lower)
+            }
+            State::Failed => writeln!(text, ",,,,,failed"),
+            State::Stalled => writeln!(text, ",,,,,stalled"),
+        };
     }
     text
 }
