@@ -1,8 +1,9 @@
 //! The angle of best lift-to-drag of a section where it works, and the band round it.
 //!
-//! The best angle is the one of greatest cl/cd in the attached range, sought between −2° and 20° and refined. A top may be flat: where
-//! two maxima lie within 0.5 % of one another the lower angle is taken, so that the answer does not jump. The working band is the span of
-//! angles round it that keeps 95 % of the greatest lift-to-drag.
+//! The best angle is the one of greatest cl/cd in the attached range, sought between −2° and 20° and refined.
+//! A top may be flat: where two maxima lie within 0.5 % of one another the lower angle is taken, so that the
+//! answer does not jump. The working band is the span of angles round it that keeps 95 % of the greatest
+//! lift-to-drag.
 
 use super::extend::Coefficients;
 
@@ -26,7 +27,8 @@ const BAND_REACH_RAD: f64 = 40.0 * STEP_RAD;
 /// Golden-section passes: one degree to 1e-3 degrees, where the top of cl/cd is flat to 1e-8.
 const PASSES: usize = 14;
 
-/// The best angle of a section given by its coefficients, sought up to its stall angle (rad). `None` when it nowhere lifts.
+/// The best angle of a section given by its coefficients, sought up to its stall angle (rad). `None` when it
+/// nowhere lifts.
 pub fn best(at: impl Fn(f64) -> Coefficients, stall_rad: f64) -> Option<Best> {
     let ratio = |a: f64| {
         let c = at(a);

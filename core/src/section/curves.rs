@@ -9,7 +9,8 @@ use super::local::{Local, Situation};
 pub struct SectionCurve {
     /// Reynolds number.
     pub reynolds: f64,
-    /// Angle of attack to the chord line in degrees, lift and drag coefficient, over the angles of the tables.
+    /// Angle of attack to the chord line in degrees, lift and drag coefficient, over the angles of the
+    /// tables.
     pub points: Vec<[f64; 3]>,
     /// Angle of best lift-to-drag in degrees, and that lift-to-drag; none when the section nowhere lifts.
     pub best: Option<(f64, f64)>,

@@ -1,14 +1,15 @@
 //! A polar beyond its own angles: from the last row to ±180°.
 //!
-//! Method: L. A. Viterna and R. D. Corrigan, *Fixed Pitch Rotor Performance of Large Horizontal Axis Wind Turbines*, 1981,
-//! from the last row of the table to 90°. Choice beyond (the paper leaves it open): 90° to 180° mirrors it with lift
-//! times −0.7, negative angles take −0.7 of the lift of the positive ones, drag is even, and the last stretch to ±180° joins
-//! lift to zero linearly with the drag of its beginning. Rows of the table always take precedence and are joined
-//! by the interpolation itself.
+//! Method: L. A. Viterna and R. D. Corrigan, *Fixed Pitch Rotor Performance of Large Horizontal Axis Wind
+//! Turbines*, 1981, from the last row of the table to 90°. Choice beyond (the paper leaves it open): 90° to
+//! 180° mirrors it with lift times −0.7, negative angles take −0.7 of the lift of the positive ones, drag is
+//! even, and the last stretch to ±180° joins lift to zero linearly with the drag of its beginning. Rows of
+//! the table always take precedence and are joined by the interpolation itself.
 
 use std::f64::consts::{FRAC_PI_2, PI};
 
-/// Aspect ratio put into the flat-plate drag: that of a propeller blade. Drag broadside follows as 1.11 + 0.018 AR.
+/// Aspect ratio put into the flat-plate drag: that of a propeller blade. Drag broadside follows as 1.11 +
+/// 0.018 AR.
 pub const BLADE_ASPECT_RATIO: f64 = 8.0;
 /// Share of the lift kept where the section is met from behind or from its upper side.
 const BACKWARD_LIFT: f64 = 0.7;

@@ -1,8 +1,9 @@
 //! A section family made ready for lookup: every polar on one common grid of angles, as cubics.
 //!
-//! Each polar keeps its own monotone cubic in angle (module [`crate::curve`]); it is only written down on the union of all the
-//! family's angles, which changes nothing of it, so that one search serves all polars. Between polars the coefficients
-//! are linear in ln Re and in thickness ratio; beyond the outermost polars they are held.
+//! Each polar keeps its own monotone cubic in angle (module [`crate::curve`]); it is only written down on the
+//! union of all the family's angles, which changes nothing of it, so that one search serves all polars.
+//! Between polars the coefficients are linear in ln Re and in thickness ratio; beyond the outermost polars
+//! they are held.
 
 use std::f64::consts::{PI, TAU};
 use std::ops::Range;
@@ -20,7 +21,8 @@ pub struct About {
     pub title: String,
     /// Where the polars come from.
     pub origin: String,
-    /// Angle of the flat face above the chord line by thickness ratio: (t/c, degrees). Empty when there is no flat face.
+    /// Angle of the flat face above the chord line by thickness ratio: (t/c, degrees). Empty when there is no
+    /// flat face.
     pub face_angle_deg: Vec<(f64, f64)>,
     /// Korn factor: 0.87 for ordinary sections, 0.95 for modern ones.
     pub korn_factor: f64,
@@ -127,7 +129,8 @@ impl Family {
         numbers
     }
 
-    /// Every thickness ratio for which there are polars, rising; empty when the polars hold for one section only.
+    /// Every thickness ratio for which there are polars, rising; empty when the polars hold for one section
+    /// only.
     #[must_use]
     pub fn thickness_ratios(&self) -> Vec<f64> {
         self.rows.iter().map(|r| r.0).filter(|t| *t > 0.0).collect()
@@ -139,8 +142,8 @@ impl Family {
         self.polars.len()
     }
 
-    /// Angle (rad) from the flat face up to the chord line at a thickness ratio; `None` without a flat face. Blade angle
-    /// on the chord line is the angle on the face plus this.
+    /// Angle (rad) from the flat face up to the chord line at a thickness ratio; `None` without a flat face.
+    /// Blade angle on the chord line is the angle on the face plus this.
     #[must_use]
     pub fn face_angle_rad(&self, thickness_ratio: f64) -> Option<f64> {
         let (t, a) = self.about.face_angle_deg.iter().copied().unzip();

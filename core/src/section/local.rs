@@ -1,15 +1,17 @@
-//! A section where it works: at one station's thickness, Reynolds and Mach number, with what the tables do not carry.
+//! A section where it works: at one station's thickness, Reynolds and Mach number, with what the tables do
+//! not carry.
 //!
-//! Compressibility: lift about zero lift grows by Prandtl and Glauert's `sqrt((1 − Mt²)/(1 − M²))` (H. Glauert, Proc. Roy.
-//! Soc. A 118, 1928; Mt is the Mach number the table holds for), with M held at the drag-divergence Mach number; drag
-//! rises by Lock's fourth-power law `20 (M − Mcr)⁴`, with `Mcr = Mdd − (0.1/80)^(1/3)` and Korn's relation
-//! `Mdd = ka − t/c − cl/10` (as given by W. H. Mason, *Configuration Aerodynamics*; from memory). Choices: the growth fades out over
-//! 20° past stall; the thickness in Korn's relation stops at 0.30 and the added drag at 0.30.
+//! Compressibility: lift about zero lift grows by Prandtl and Glauert's `sqrt((1 − Mt²)/(1 − M²))` (H.
+//! Glauert, Proc. Roy. Soc. A 118, 1928; Mt is the Mach number the table holds for), with M held at the
+//! drag-divergence Mach number; drag rises by Lock's fourth-power law `20 (M − Mcr)⁴`, with `Mcr = Mdd −
+//! (0.1/80)^(1/3)` and Korn's relation `Mdd = ka − t/c − cl/10` (as given by W. H. Mason, *Configuration
+//! Aerodynamics*; from memory). Choices: the growth fades out over 20° past stall; the thickness in Korn's
+//! relation stops at 0.30 and the added drag at 0.30.
 //!
-//! Rotation delays stall inboard: H. Snel, R. Houwink and J. Bosschers, ECN-C-93-052, 1994:
-//! `cl = cl2D + 3.1 (c/r)² (cl_potential − cl2D) (Ω r/W)²`, full to 30°, none from 50° on. Choices: it fades out between
-//! 0.7 and 0.8 of the radius, the factor on the difference stops at 1, potential lift is `2π sin(α − α0)`
-//! and only lift lost to separation (α past stall's onset, lift below potential) is given back.
+//! Rotation delays stall inboard: H. Snel, R. Houwink and J. Bosschers, ECN-C-93-052, 1994: `cl = cl2D + 3.1
+//! (c/r)² (cl_potential − cl2D) (Ω r/W)²`, full to 30°, none from 50° on. Choices: it fades out between 0.7
+//! and 0.8 of the radius, the factor on the difference stops at 1, potential lift is `2π sin(α − α0)` and
+//! only lift lost to separation (α past stall's onset, lift below potential) is given back.
 
 use std::iter::Sum;
 use std::ops::Mul;

@@ -36,8 +36,8 @@ impl Comparison {
     }
 }
 
-/// Compares two plans of the same outline, thicknesses and Reynolds numbers, task by task. Both angles are to the
-/// chord line of the drawing, so that their difference is one of the blade angle.
+/// Compares two plans of the same outline, thicknesses and Reynolds numbers, task by task. Both angles are to
+/// the chord line of the drawing, so that their difference is one of the blade angle.
 #[must_use]
 pub fn compare(carved: (&Plan, &[Made]), drawn: (&Plan, &[Made])) -> Vec<Comparison> {
     let turn_rad = |plan: &Plan, task: usize| plan.outline(task).map_or(0.0, Outline::rotation_rad);

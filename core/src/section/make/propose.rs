@@ -3,8 +3,8 @@
 /// Most values proposed.
 const MOST: usize = 5;
 
-/// Reynolds numbers from the least to the greatest of the stations', each at most about twice the one before while five are
-/// enough, rounded to two figures.
+/// Reynolds numbers from the least to the greatest of the stations', each at most about twice the one before
+/// while five are enough, rounded to two figures.
 ///
 /// ```
 /// use spokeshave::section::make::proposed_reynolds;

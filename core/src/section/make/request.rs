@@ -8,8 +8,8 @@ use crate::section::solver::USUAL_NODES;
 
 /// Most polars of one request.
 pub const MOST_TASKS: usize = 120;
-/// Trips of a rough or taped leading edge, chords from the nose, upper and lower side: common practice in wind-tunnel
-/// tests with a fixed transition.
+/// Trips of a rough or taped leading edge, chords from the nose, upper and lower side: common practice in
+/// wind-tunnel tests with a fixed transition.
 pub const ROUGH_NOSE: [f64; 2] = [0.05, 0.10];
 /// Reynolds numbers that can be asked for.
 pub const REYNOLDS: [f64; 2] = [1e4, 1e8];
@@ -39,8 +39,8 @@ impl Angles {
     /// The angles themselves, whole multiples of the step from the first one on.
     ///
     /// # Errors
-    /// [`MakeError::Request`] for a span outside −30° to 30°, a step below 0.05° or above 5°, fewer than five angles or
-    /// more than [`Self::MOST`].
+    /// [`MakeError::Request`] for a span outside −30° to 30°, a step below 0.05° or above 5°, fewer than five
+    /// angles or more than [`Self::MOST`].
     pub fn list(&self) -> Result<Vec<f64>, MakeError> {
         super::within("first angle, degrees", self.first_deg, [-30.0, 30.0])?;
         super::within("last angle, degrees", self.last_deg, [-30.0, 30.0])?;
