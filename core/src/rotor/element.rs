@@ -120,6 +120,8 @@ const NEAR_ZERO_RAD: f64 = 1e-7;
 const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
+/// Up to this share of the stall angle lift rises steeply.
+const STEEP: f64 = 0.75;
 /// Of the inflow angle (rad) and of the residual over `hypot(V, Ω r)`.
 const CONVERGED: f64 = 1e-12;
 const MOST_PASSES: usize = 100;
@@ -191,13 +193,14 @@ impl Element<'_> {
 
     /// The root of least `|α|` between two inflow angles.
     ///
-    /// Between the stall angles lift rises with α, so that at most one root lies on either side of α = 0 and two
-    /// looks tell; beyond them the march takes small steps.
+    /// Well between the stall angles lift rises steeply with α, so that at most one root lies on either side of α = 0 and
+    /// two looks tell. Towards stall, where drag rises faster than lift, roots may come in pairs: from there on the march
+    /// takes small steps.
     fn nearest_root(&self, lo: f64, hi: f64, residual: &impl Fn(f64) -> f64) -> Option<f64> {
         let start = self.angle_rad.clamp(lo, hi);
         let at_start = residual(start);
-        let down = (self.angle_rad - self.section.stall_rad().max(0.0)).clamp(lo, start);
-        let up = (self.angle_rad - self.section.negative_stall_rad().min(0.0)).clamp(start, hi);
+        let down = (self.angle_rad - STEEP * self.section.stall_rad().max(0.0)).clamp(lo, start);
+        let up = (self.angle_rad - STEEP * self.section.negative_stall_rad().min(0.0)).clamp(start, hi);
         // The residual rises through the wanted root: look where it should be first.
         let sides = if at_start > 0.0 { [(down, lo), (up, hi)] } else { [(up, hi), (down, lo)] };
         let mut best: Option<f64> = None;

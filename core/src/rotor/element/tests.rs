@@ -24,8 +24,8 @@ fn plate_polar() -> Family {
         .unwrap()
 }
 
-/// All roots between two angles by a scan of `step`, finer near zero; the one of least `|α|`.
-fn scanned(e: &Element, lo: f64, hi: f64, step: f64) -> Option<f64> {
+/// All roots between two angles by a scan of `step`, finer near zero; the one of least `|α|` first.
+fn scanned(e: &Element, lo: f64, hi: f64, step: f64) -> Vec<f64> {
     let residual = |phi: f64| {
         let t = e.terms(phi);
         e.turning_m_s * t.n - e.axial_m_s * t.m
@@ -49,12 +49,19 @@ fn scanned(e: &Element, lo: f64, hi: f64, step: f64) -> Option<f64> {
         }
         roots.push(0.5 * (a + b));
     }
-    roots.into_iter().min_by(|a, b| (e.angle_rad - a).abs().total_cmp(&(e.angle_rad - b).abs()))
+    roots.sort_by(|a, b| (e.angle_rad - a).abs().total_cmp(&(e.angle_rad - b).abs()));
+    roots
+}
+
+/// The roots of the first bracket that has any.
+fn all_by_scan(e: &Element) -> Vec<f64> {
+    let (brackets, count) = e.brackets();
+    let scans = brackets[..count].iter().map(|&(lo, hi)| scanned(e, lo, hi, 0.1f64.to_radians()));
+    scans.into_iter().find(|roots| !roots.is_empty()).unwrap_or_default()
 }
 
 fn by_scan(e: &Element) -> Option<f64> {
-    let (brackets, count) = e.brackets();
-    brackets[..count].iter().find_map(|&(lo, hi)| scanned(e, lo, hi, 0.1f64.to_radians()))
+    all_by_scan(e).first().copied()
 }
 
 prop_compose! {
@@ -85,15 +92,31 @@ proptest! {
     fn the_march_finds_the_root_that_a_fine_scan_finds(s in situations()) {
         let family = plate_polar();
         let e = element(&family, s);
-        let (quick, slow) = (e.balance().map(|b| b.inflow_rad), by_scan(&e));
-        prop_assert_eq!(quick.is_some(), slow.is_some());
-        if let (Some(quick), Some(slow)) = (quick, slow) {
+        let (quick, roots) = (e.balance().map(|b| b.inflow_rad), all_by_scan(&e));
+        prop_assert_eq!(quick.is_some(), !roots.is_empty());
+        if let (Some(quick), Some(&slow)) = (quick, roots.first()) {
             // Two roots may lie equally far from α = 0: then either is the answer.
             let same = (quick - slow).abs() < 1e-6;
             let tie = ((e.angle_rad - quick).abs() - (e.angle_rad - slow).abs()).abs() < 1e-6;
-            prop_assert!(same || tie, "{} {} of {}", quick.to_degrees(), slow.to_degrees(), e.angle_rad.to_degrees());
+            // Where the residual just grazes zero it has two roots within one step of the march, which passes over them.
+            let grazes = roots[1..].iter().any(|twin| (twin - slow).abs() < STEP_RAD) && roots.iter().any(|r| (r - quick).abs() < 1e-6);
+            prop_assert!(same || tie || grazes, "{} {} of {}", quick.to_degrees(), slow.to_degrees(), e.angle_rad.to_degrees());
         }
     }
+}
+
+#[test]
+fn the_march_passes_over_a_root_that_a_scan_finds_in_one_of_ten_thousand_elements_at_most() {
+    let family = plate_polar();
+    let mut runner = proptest::test_runner::TestRunner::deterministic();
+    let elements = (0..20_000).map(|_| situations().new_tree(&mut runner).unwrap().current());
+    let passed_over = elements.filter(|s| {
+        let e = element(&family, *s);
+        let away = |phi: f64| (e.angle_rad - phi).abs();
+        e.balance().zip(by_scan(&e)).is_some_and(|(quick, slow)| away(quick.inflow_rad) > away(slow) + 1e-6)
+    });
+    let count = passed_over.count();
+    assert!(count <= 2, "{count}");
 }
 
 /// On tables with all their small waves the two may differ where roots come in pairs closer than a step; that is rare.
