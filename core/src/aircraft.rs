@@ -2,6 +2,10 @@
 //!
 //! `CD = cd0 + k CL²`, lift equal to weight: `D = q S cd0 + k W²/(q S)`. A multirotor asks each rotor for its share of the weight.
 
+mod asked;
+
+pub use asked::{Asked, asked};
+
 use std::f64::consts::PI;
 
 use serde::Serialize;

@@ -25,6 +25,7 @@ mod line;
 mod marks;
 mod matched;
 mod meeting;
+mod offer;
 mod root;
 mod settle;
 mod take_off;
@@ -38,6 +39,7 @@ pub use held::held;
 pub use line::line;
 pub use matched::matched;
 pub use meeting::meeting;
+pub use offer::{Offer, offer};
 pub use take_off::{ROLLING_FRICTION, take_off};
 
 /// Fastest tip considered where no engine sets a limit, as a Mach number.

@@ -5,6 +5,7 @@ use std::rc::Rc;
 
 use gloo_events::EventListener;
 use spokeshave::drawn::DrawnStation;
+use spokeshave::fit::Offer;
 use spokeshave::job::Job;
 use spokeshave::result::PointResult;
 use spokeshave::rig::Rig;
@@ -90,6 +91,8 @@ pub struct Later {
     pub map: Rc<Option<DepartureMap>>,
     /// The coefficient curves there.
     pub curves: Rc<Vec<CurvePoint>>,
+    /// What the shaft offers and the propeller takes there; empty while the Engine panel is closed.
+    pub offer: Rc<Vec<Offer>>,
 }
 
 impl Later {
@@ -124,9 +127,10 @@ fn use_later(results: &Rc<RefCell<Results>>, now: &Rc<Now>, state: &State) -> Rc
     let later = use_state_eq(Rc::<Later>::default);
     let work = use_mut_ref(|| None::<Work>);
     let (results, setter, before) = (results.clone(), later.setter(), (*later).clone());
-    let key = (now.job.clone(), state.point, state.drag.is_some());
-    use_effect_with(key, move |(job, point, dragging)| {
-        let plan = Plan { count: job.0.flight_points.len(), point: *point, dragging: *dragging };
+    let key = (now.job.clone(), state.point, state.drag.is_some(), state.opened);
+    use_effect_with(key, move |(job, point, dragging, opened)| {
+        let count = job.0.flight_points.len();
+        let plan = Plan { count, point: *point, dragging: *dragging, opened: *opened };
         // Putting off the new work calls off the old.
         *work.borrow_mut() = Some(Work::begin(plan, results, before, setter));
     });

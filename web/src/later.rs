@@ -11,6 +11,7 @@ use crate::app::{Later, RigRef};
 use crate::effect::after_frame::{Waiting, after_frame};
 use crate::keep;
 use crate::results::Results;
+use crate::state::Opened;
 
 /// What has to be worked out.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -21,6 +22,8 @@ pub struct Plan {
     pub point: usize,
     /// Whether something is being dragged: then the map and the curves stay as they are.
     pub dragging: bool,
+    /// Which panels are open.
+    pub opened: Opened,
 }
 
 /// A piece of the work.
@@ -32,6 +35,8 @@ pub enum Piece {
     Curves,
     /// The departure map.
     Map,
+    /// What the shaft offers and the propeller takes.
+    Offer,
     /// Showing what has been worked out so far.
     Show,
 }
@@ -43,7 +48,9 @@ impl Plan {
         let mut pieces: Vec<Piece> = (0..self.count).map(Piece::Point).collect();
         pieces.push(Piece::Show);
         if !self.dragging {
-            pieces.extend([Piece::Map, Piece::Curves, Piece::Show]);
+            pieces.extend([Piece::Map, Piece::Curves]);
+            pieces.extend(self.opened.engine.then_some(Piece::Offer));
+            pieces.push(Piece::Show);
         }
         pieces
     }
@@ -98,6 +105,7 @@ impl Bench {
             Piece::Point(i) => drop(results.point(i)),
             Piece::Curves => drop(results.curves(self.plan.point)),
             Piece::Map => drop(results.map(self.plan.point)),
+            Piece::Offer => drop(results.offer(self.plan.point)),
             Piece::Show => {
                 let later = self.shown(&mut results, last && !self.plan.dragging);
                 drop(results);
@@ -111,22 +119,33 @@ impl Bench {
         let point = self.plan.point;
         let points = (0..self.plan.count).map(|i| results.point(i)).collect();
         let rig = results.rig().map(RigRef);
-        if whole {
-            return Later { rig, point, points, map: results.map(point), curves: results.curves(point) };
+        let now = Later { rig, point, points, ..Later::clone(&self.before) };
+        if !whole {
+            return now;
         }
-        Later { rig, point, points, map: self.before.map.clone(), curves: self.before.curves.clone() }
+        let offer = if self.plan.opened.engine { results.offer(point) } else { Rc::default() };
+        Later { map: results.map(point), curves: results.curves(point), offer, ..now }
     }
 }
 
 #[cfg(test)]
 mod tests {
     use super::*;
+    use crate::state::Part;
 
     #[test]
     fn the_map_waits_until_a_drag_is_over() {
-        let plan = Plan { count: 2, point: 0, dragging: true };
+        let plan = Plan { count: 2, point: 0, dragging: true, opened: Opened::default() };
         assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Show]);
         let all = Plan { dragging: false, ..plan }.pieces();
         assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::Show]);
+    }
+
+    #[test]
+    fn a_closed_panel_is_not_worked_out() {
+        let closed = Plan { count: 1, point: 0, dragging: false, opened: Opened::default() };
+        assert!(!closed.pieces().contains(&Piece::Offer));
+        let open = Plan { opened: Opened::default().with(Part::Engine, true), ..closed };
+        assert!(open.pieces().contains(&Piece::Offer));
     }
 }

@@ -4,6 +4,7 @@
 use std::rc::Rc;
 
 use spokeshave::drawn::{DrawnStation, stations};
+use spokeshave::fit::{self, Offer};
 use spokeshave::job::{FlightPoint, Job};
 use spokeshave::result::{PointResult, SectionPoint};
 use spokeshave::rig::Rig;
@@ -14,6 +15,8 @@ const MAP_SPEEDS: u32 = 60;
 const MAP_RADII: u32 = 40;
 /// Steps of the coefficient curves.
 const CURVE_STEPS: u32 = 40;
+/// Speeds of rotation at which offer and demand of power are compared.
+const OFFER_STEPS: u32 = 48;
 /// Results kept for each kind.
 const KEPT: usize = 64;
 
@@ -49,6 +52,7 @@ pub struct Results {
     points: Shelf<FlightPoint, Option<PointResult>>,
     maps: Shelf<FlightPoint, Option<DepartureMap>>,
     curves: Shelf<FlightPoint, Vec<CurvePoint>>,
+    offers: Shelf<FlightPoint, Vec<Offer>>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
 }
 
@@ -100,6 +104,12 @@ impl Results {
     pub fn curves(&mut self, i: usize) -> Rc<Vec<CurvePoint>> {
         let Some((rig, key)) = self.at(i) else { return Rc::default() };
         self.curves.get(&key, || rig.curves(i, CURVE_STEPS))
+    }
+
+    /// What the shaft offers and the propeller takes over rpm at a flight point.
+    pub fn offer(&mut self, i: usize) -> Rc<Vec<Offer>> {
+        let Some((rig, key)) = self.at(i) else { return Rc::default() };
+        self.offers.get(&key, || fit::offer(&rig, i, OFFER_STEPS))
     }
 
     /// Lift and drag of a station's section over angle at a flight point.

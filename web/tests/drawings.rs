@@ -8,6 +8,9 @@ use spokeshave_web::blade_view::{
 };
 use spokeshave_web::chart::line::{Axis, LineChart, Series};
 use spokeshave_web::chart::unit::Unit;
+use spokeshave_web::state::{Action, State};
+use spokeshave_web::view::Seen;
+use spokeshave_web::view::machine::{AircraftPanel, EnginePanel};
 use std::rc::Rc;
 use yew::prelude::*;
 
@@ -84,6 +87,25 @@ fn MapDrawing(shown: &Shown) -> Html {
     }
 }
 
+/// The page's state with an example and a flight point of it.
+fn state(shown: &Shown) -> State {
+    State::started(None).after(Action::Demo(shown.demo)).after(Action::SelectPoint(shown.point))
+}
+
+#[component]
+fn MachinePanels(shown: &Shown) -> Html {
+    let state = Seen::new(Rc::new(state(shown)));
+    let rig = Rig::new(state.job()).expect("examples are valid");
+    let (offer, point) =
+        (Rc::new(spokeshave::fit::offer(&rig, shown.point, 48)), Rc::new(rig.point(shown.point)));
+    html! {
+        <>
+            <AircraftPanel state={state.clone()} />
+            <EnginePanel {state} {offer} {point} />
+        </>
+    }
+}
+
 #[component]
 fn BrokenCurve() -> Html {
     let axis = |words: &'static str| Axis { words: words.into(), unit: Unit::ratio(2), span: None };
@@ -153,4 +175,17 @@ fn maps_are_drawn_for_every_example_and_stay_small() {
 fn curves_with_gaps_and_without_points_are_drawn() {
     let text = drawn::<BrokenCurve>(|| ());
     assert!(text.contains("Broken") && text.contains("Empty"));
+}
+
+#[test]
+fn aircraft_and_engine_are_drawn_for_every_example_and_flight_point() {
+    for shown in everywhere() {
+        let (demo, text) = (shown.demo, drawn::<MachinePanels>(move || shown));
+        let (hovers, piston) = (demo == 2, demo == 0);
+        assert_eq!(text.contains("To hover each rotor has to hold"), hovers, "{shown:?}");
+        assert_eq!(text.contains("Speeds of the aircraft"), !hovers, "{shown:?}");
+        assert_eq!(text.contains("Remove row 5"), piston, "{shown:?}");
+        assert_eq!(text.contains("Cells in series"), !piston, "{shown:?}");
+        assert!(text.contains("full throttle") && text.contains("propeller at"), "{shown:?}");
+    }
 }

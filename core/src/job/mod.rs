@@ -5,6 +5,7 @@ mod by_kind;
 mod check;
 mod demo;
 mod document;
+mod drag;
 mod error;
 mod own;
 

@@ -1,6 +1,6 @@
 //! What can happen on the page.
 
-use super::{Choice, Field, Measure, Notice, Running, Theme};
+use super::{Choice, Field, Measure, Notice, Part, Running, Theme};
 use crate::units::Units;
 
 /// What can happen.
@@ -52,6 +52,8 @@ pub enum Action {
     Theme(Theme),
     /// Something has to be said.
     Say(Notice),
+    /// A panel was opened or closed.
+    Unfold(Part, bool),
     /// The job was saved as a file.
     Saved,
     /// What was said has been read.

@@ -8,6 +8,8 @@ use super::notice::in_words;
 /// A blade needs an inner and an outer station.
 pub const FEWEST_STATIONS: usize = 2;
 
+use super::machine::{AircraftChoice, EngineChoice};
+
 /// A change that is picked from a few.
 #[derive(Clone, Debug, PartialEq)]
 pub enum Choice {
@@ -43,6 +45,10 @@ pub enum Choice {
     AddPoint(usize),
     /// A flight point less.
     RemovePoint(usize),
+    /// Something of the aircraft.
+    Aircraft(AircraftChoice),
+    /// Something of the engine.
+    Engine(EngineChoice),
 }
 
 /// Ways the blades turn in the hub.
@@ -177,6 +183,8 @@ impl Choice {
             Self::RemoveStation(i) => format!("remove station {}", i + 1),
             Self::AddPoint(_) => "add a flight point".into(),
             Self::RemovePoint(i) => format!("remove {}", point(i)),
+            Self::Aircraft(choice) => choice.name(),
+            Self::Engine(choice) => choice.name(),
         }
     }
 
@@ -221,6 +229,8 @@ impl Choice {
             }
             Self::AddPoint(like) => add_point(&mut next, *like),
             Self::RemovePoint(i) => remove(&mut next.flight_points, *i, 1, "A job needs one flight point.")?,
+            Self::Aircraft(choice) => choice.apply(&mut next),
+            Self::Engine(choice) => choice.apply(&mut next)?,
         }
         Ok(next)
     }
@@ -246,7 +256,8 @@ fn set(job: &mut Job, i: usize, to: SettingKind, running: Running) {
     }
 }
 
-fn remove<T>(from: &mut Vec<T>, i: usize, fewest: usize, why: &str) -> Result<(), String> {
+/// Takes out one of several, as long as enough are left.
+pub(super) fn remove<T>(from: &mut Vec<T>, i: usize, fewest: usize, why: &str) -> Result<(), String> {
     if from.len() <= fewest || i >= from.len() {
         return Err(why.into());
     }

@@ -5,7 +5,7 @@ use std::collections::BTreeMap;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{Job, Problem};
 
-use super::{Field, Measure, PointFigure};
+use super::{EngineFigure, Field, Measure};
 use crate::number;
 use crate::units::{Quantity, Units};
 
@@ -29,15 +29,15 @@ pub fn shown_text(job: &Job, drawn: &[DrawnStation], units: Units, field: Field)
     }
     let quantity = field.quantity(job);
     let Some(value) = field.value(job, drawn) else { return String::new() };
-    let given = field.is_given(job);
-    let fewest = if given { units.box_decimals(quantity) } else { units.decimals(quantity) };
-    let finer = quantity != Quantity::Count && fewest < 3;
-    let most = fewest + usize::from(finer && given);
-    let mut text = number::plain(units.shown(quantity, value), most);
-    if most > fewest && text.ends_with('0') {
-        text.pop();
-    }
-    if text.ends_with('.') { text.trim_end_matches('.').into() } else { text }
+    let (fewest, most) = if field.is_given(job) {
+        units.box_decimals(quantity)
+    } else {
+        (units.decimals(quantity), units.decimals(quantity))
+    };
+    let text = number::plain(units.shown(quantity, value), most);
+    let spare = text.len() - text.trim_end_matches('0').len();
+    let text = &text[..text.len() - spare.min(most - fewest)];
+    text.trim_end_matches('.').into()
 }
 
 /// Tries a typed text on a job.
@@ -54,7 +54,7 @@ pub fn tried(
     if field.text(job).is_some() {
         return tried_text(job, field, text);
     }
-    if let Some(without) = without_airspeed(job, field, text) {
+    if let Some(without) = emptied(job, field, text) {
         return Ok(without);
     }
     let quantity = field.quantity(job);
@@ -68,12 +68,10 @@ pub fn tried(
     written(job, units, field, value)
 }
 
-/// Full throttle without an airspeed means as fast as it goes, so there the box may be emptied.
-fn without_airspeed(job: &Job, field: Field, text: &str) -> Option<Job> {
-    let Field::Point(i, PointFigure::Airspeed) = field else { return None };
+/// An empty box takes out what the job may go without; full throttle without an airspeed means as fast as it goes.
+fn emptied(job: &Job, field: Field, text: &str) -> Option<Job> {
     let mut next = job.clone();
-    next.flight_points.get_mut(i)?.airspeed_m_s = None;
-    (text.trim().is_empty() && next.check().is_empty()).then_some(next)
+    (text.trim().is_empty() && field.clear(&mut next) && next.check().is_empty()).then_some(next)
 }
 
 fn tried_text(job: &Job, field: Field, text: &str) -> Result<Job, String> {
@@ -114,6 +112,9 @@ fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem)
             text(outer)
         );
     }
+    if let (Field::Engine(EngineFigure::CurveRpm(i)), None) = (field, problem.span) {
+        return between_rows(job, i);
+    }
     let own = problem.path == field.path(job);
     match problem.span {
         Some((low, high)) if own => {
@@ -144,6 +145,20 @@ fn radius_span(job: &Job, field: Field) -> Option<(f64, f64)> {
     let radius_m = |i: usize| job.propeller.stations.get(i).map(|s| s.radius_fraction * tip_m);
     let low = i.checked_sub(1).and_then(radius_m).unwrap_or(0.0);
     Some((low, radius_m(i + 1).unwrap_or(tip_m)))
+}
+
+/// Between the rows next to it.
+fn between_rows(job: &Job, i: usize) -> String {
+    let rpm = |i: usize| EngineFigure::CurveRpm(i).value(job).map(|rpm| number::fixed(rpm, 0));
+    let rows = (i.checked_sub(1).and_then(rpm), rpm(i + 1));
+    match rows {
+        (Some(low), Some(high)) => {
+            format!("Allowed is above {low} and below {high}\u{a0}rpm, the rows beside it.")
+        }
+        (Some(low), None) => format!("Allowed is above {low}\u{a0}rpm, the row before."),
+        (None, Some(high)) => format!("Allowed is below {high}\u{a0}rpm, the next row."),
+        (None, None) => "There is no such row.".into(),
+    }
 }
 
 fn chord_m(job: &Job, i: usize) -> f64 {

@@ -3,6 +3,7 @@
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
 
+use super::machine::{AircraftFigure, EngineFigure};
 use super::measure::{Measure, write_station};
 use super::point_figure::PointFigure;
 use crate::units::Quantity;
@@ -32,6 +33,10 @@ pub enum Field {
     Point(usize, PointFigure),
     /// Elements of the integrals.
     Elements,
+    /// A figure of the aircraft.
+    Aircraft(AircraftFigure),
+    /// A figure of the engine.
+    Engine(EngineFigure),
 }
 
 impl Field {
@@ -55,6 +60,8 @@ impl Field {
                 Some(Setting::Throttle { .. }) => Quantity::Share,
                 _ => Quantity::Rpm,
             },
+            Self::Aircraft(figure) => figure.quantity(),
+            Self::Engine(figure) => figure.quantity(),
         }
     }
 
@@ -76,6 +83,8 @@ impl Field {
                 format!("{} of {name}", figure.name())
             }
             Self::Elements => "number of elements".into(),
+            Self::Aircraft(figure) => figure.name().into(),
+            Self::Engine(figure) => figure.name(),
         }
     }
 
@@ -94,6 +103,8 @@ impl Field {
             Self::Station(i, measure) => format!("propeller.stations[{i}].{}", measure.key()),
             Self::Point(i, figure) => format!("flight_points[{i}].{}", figure.key(job, i)),
             Self::Elements => "method.elements".into(),
+            Self::Aircraft(figure) => figure.path(),
+            Self::Engine(figure) => figure.path(),
         }
     }
 
@@ -112,6 +123,8 @@ impl Field {
             (Self::Station(i, measure), _) => drawn.get(i).and_then(|d| measure.of(d)),
             (Self::Point(i, figure), _) => figure.value(job, i),
             (Self::Elements, _) => Some(f64::from(job.method.elements)),
+            (Self::Aircraft(figure), _) => figure.value(job),
+            (Self::Engine(figure), _) => figure.value(job),
             _ => None,
         }
     }
@@ -163,13 +176,27 @@ impl Field {
             (Self::Station(i, measure), _) => return write_station(job, i, measure, value),
             (Self::Point(i, figure), _) => return figure.write(job, i, value),
             (Self::Elements, _) => job.method.elements = whole(value),
+            (Self::Aircraft(figure), _) => return figure.write(job, value),
+            (Self::Engine(figure), _) => return figure.write(job, value),
             _ => return false,
         }
         true
     }
+
+    /// Takes the figure out of a job; whether a job may go without it.
+    pub fn clear(self, job: &mut Job) -> bool {
+        match self {
+            Self::Point(i, PointFigure::Airspeed) => {
+                job.flight_points.get_mut(i).map(|p| p.airspeed_m_s = None).is_some()
+            }
+            Self::Aircraft(figure) => figure.clear(job),
+            Self::Engine(figure) => figure.clear(job),
+            _ => false,
+        }
+    }
 }
 
 /// A whole number; 0, which nothing allows, for what is none.
-fn whole(value: f64) -> u32 {
+pub(super) fn whole(value: f64) -> u32 {
     if value.fract() == 0.0 && (0.0..=1e6).contains(&value) { value as u32 } else { 0 }
 }

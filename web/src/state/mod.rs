@@ -7,11 +7,15 @@ pub mod drag;
 pub mod entry;
 pub mod field;
 pub mod history;
+pub mod machine;
 pub mod measure;
 pub mod notice;
+pub mod opened;
 pub mod point_figure;
 #[cfg(test)]
 mod tests;
+#[cfg(test)]
+mod tests_machine;
 
 use std::rc::Rc;
 
@@ -23,8 +27,13 @@ pub use drag::{Drag, drawn, follows};
 pub use entry::{Draft, Drafts, shown_text};
 pub use field::Field;
 pub use history::History;
+pub use machine::{
+    AircraftChoice, AircraftFigure, AircraftKind, AltitudeKind, DragBy, EngineChoice, EngineFigure,
+    EngineKind,
+};
 pub use measure::Measure;
 pub use notice::Notice;
+pub use opened::{Opened, Part};
 pub use point_figure::PointFigure;
 
 use notice::refused;
@@ -71,6 +80,8 @@ pub struct State {
     pub notice: Option<Notice>,
     /// The job as it was last opened from or saved as a file.
     pub filed: Option<Rc<Job>>,
+    /// Panels that are open.
+    pub opened: Opened,
 }
 
 impl State {
@@ -91,6 +102,7 @@ impl State {
             theme: Theme::default(),
             notice: None,
             filed: None,
+            opened: Opened::default(),
         }
     }
 
@@ -155,6 +167,7 @@ impl State {
             Action::Theme(theme) => self.theme = theme,
             Action::Say(notice) => self.notice = Some(notice),
             Action::Dismiss => self.notice = None,
+            Action::Unfold(part, open) => self.opened = self.opened.with(part, open),
             Action::Saved => self.filed = Some(self.job().clone()),
         }
     }
@@ -219,7 +232,7 @@ impl State {
             Choice::RemoveStation(i) if self.station > *i => self.station -= 1,
             Choice::AddPoint(_) => self.point = self.job().flight_points.len() - 1,
             Choice::RemovePoint(i) if self.point > *i => self.point -= 1,
-            Choice::RemoveStation(_) | Choice::RemovePoint(_) => {}
+            Choice::RemoveStation(_) | Choice::RemovePoint(_) | Choice::Aircraft(_) | Choice::Engine(_) => {}
             _ => return,
         }
         self.drafts.clear();

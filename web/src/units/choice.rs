@@ -84,3 +84,21 @@ choice! {
         PoundFoot = "lbf ft",
     }
 }
+choice! {
+    /// Unit of mass.
+    MassUnit {
+        /// Kilogram.
+        Kilogram = "kg",
+        /// Pound.
+        Pound = "lb",
+    }
+}
+choice! {
+    /// Unit of area.
+    AreaUnit {
+        /// Square metre.
+        SquareMetre = "m²",
+        /// Square foot.
+        SquareFoot = "ft²",
+    }
+}

@@ -1,10 +1,13 @@
 //! The units the page shows and takes. Inside everything is SI (angles in degrees, as in the job file).
 
 mod choice;
+#[cfg(test)]
+mod tests;
+mod typed;
 mod worth;
 
-pub use choice::{ForceUnit, HeightUnit, LengthUnit, PowerUnit, SpeedUnit, TorqueUnit};
-use worth::{force_n, height_m, length_m, power_w, speed_m_s, torque_n_m};
+pub use choice::{AreaUnit, ForceUnit, HeightUnit, LengthUnit, MassUnit, PowerUnit, SpeedUnit, TorqueUnit};
+pub use typed::typed_unit_si;
 
 use crate::chart::unit::Unit;
 use serde::{Deserialize, Serialize};
@@ -36,6 +39,28 @@ pub enum Quantity {
     Rpm,
     /// A share, shown in percent.
     Share,
+    /// Mass, kg.
+    Mass,
+    /// Area of a wing, m².
+    Area,
+    /// Fuel for the work done, kg per kWh.
+    Consumption,
+    /// Fuel burnt in an hour, kg.
+    FuelFlow,
+    /// Electric resistance, Ω.
+    Resistance,
+    /// Electric current, A.
+    Current,
+    /// Voltage, V.
+    Voltage,
+    /// Electric charge, A h.
+    Charge,
+    /// Speed constant of a motor, rpm per volt.
+    SpeedConstant,
+    /// A coefficient, of three figures or more.
+    Coefficient,
+    /// A ratio of a few units, such as that of a gear.
+    Ratio,
     /// A number without unit.
     Number,
     /// A whole number.
@@ -44,6 +69,7 @@ pub enum Quantity {
 
 /// The units picked.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize, Deserialize)]
+#[serde(default)]
 pub struct Units {
     /// Of lengths on the propeller.
     pub length: LengthUnit,
@@ -57,6 +83,10 @@ pub struct Units {
     pub height: HeightUnit,
     /// Of torque.
     pub torque: TorqueUnit,
+    /// Of mass and fuel.
+    pub mass: MassUnit,
+    /// Of wing area.
+    pub area: AreaUnit,
 }
 
 impl Default for Units {
@@ -68,6 +98,8 @@ impl Default for Units {
             power: PowerUnit::Kilowatt,
             height: HeightUnit::Metre,
             torque: TorqueUnit::NewtonMetre,
+            mass: MassUnit::Kilogram,
+            area: AreaUnit::SquareMetre,
         }
     }
 }
@@ -105,7 +137,18 @@ impl Units {
             Quantity::Temperature => "K",
             Quantity::Rpm => "rpm",
             Quantity::Share => "%",
-            Quantity::Number | Quantity::Count => "",
+            Quantity::Mass => self.mass.symbol(),
+            Quantity::Area => self.area.symbol(),
+            Quantity::Consumption if self.mass == MassUnit::Pound => "lb/hp h",
+            Quantity::Consumption => "kg/kWh",
+            Quantity::FuelFlow if self.mass == MassUnit::Pound => "lb/h",
+            Quantity::FuelFlow => "kg/h",
+            Quantity::Resistance => "mΩ",
+            Quantity::Current => "A",
+            Quantity::Voltage => "V",
+            Quantity::Charge => "A h",
+            Quantity::SpeedConstant => "rpm/V",
+            Quantity::Coefficient | Quantity::Ratio | Quantity::Number | Quantity::Count => "",
         }
     }
 
@@ -139,121 +182,37 @@ impl Units {
             Quantity::Speed if self.speed == SpeedUnit::MetrePerSecond => 1,
             Quantity::Power if self.power != PowerUnit::Watt => 1,
             Quantity::Climb if self.height == HeightUnit::Metre => 1,
-            Quantity::Angle | Quantity::Temperature => 1,
-            Quantity::Number => 3,
+            Quantity::Angle
+            | Quantity::Temperature
+            | Quantity::Mass
+            | Quantity::Area
+            | Quantity::FuelFlow
+            | Quantity::Current
+            | Quantity::Charge => 1,
+            Quantity::Voltage | Quantity::Ratio => 2,
+            Quantity::Number | Quantity::Coefficient | Quantity::Consumption => 3,
             _ => 0,
         }
     }
 
-    /// Decimals a figure carries at least in a box to type in.
+    /// Fewest and most decimals a figure carries in a box to type in: enough to tell what is in the job.
     #[must_use]
-    pub fn box_decimals(self, quantity: Quantity) -> usize {
+    pub fn box_decimals(self, quantity: Quantity) -> (usize, usize) {
         match quantity {
-            Quantity::Length if self.length == LengthUnit::Millimetre => 1,
-            Quantity::Length => 3,
-            Quantity::Number | Quantity::Temperature => 0,
-            _ => self.decimals(quantity),
+            Quantity::Length if self.length == LengthUnit::Inch => (3, 3),
+            Quantity::Length => (1, 2),
+            Quantity::Number | Quantity::Temperature | Quantity::SpeedConstant => (0, 1),
+            Quantity::Count => (0, 0),
+            Quantity::Mass | Quantity::Charge | Quantity::Resistance => (0, 3),
+            Quantity::Current => (0, 2),
+            Quantity::Voltage | Quantity::Ratio | Quantity::Area => (1, 3),
+            Quantity::Coefficient | Quantity::Consumption => (2, 5),
+            _ => (self.decimals(quantity), self.decimals(quantity) + 1),
         }
     }
 
     /// One of the unit shown, in SI.
     fn worth(self, quantity: Quantity) -> f64 {
-        match quantity {
-            Quantity::Length => length_m(self.length),
-            Quantity::Height => height_m(self.height),
-            Quantity::Speed => speed_m_s(self.speed),
-            Quantity::Climb if self.height == HeightUnit::Foot => height_m(HeightUnit::Foot) / 60.0,
-            Quantity::Grading if self.force == ForceUnit::PoundForce => {
-                force_n(self.force) / height_m(HeightUnit::Foot)
-            }
-            Quantity::Force | Quantity::Grading => force_n(self.force),
-            Quantity::Torque => torque_n_m(self.torque),
-            Quantity::Power => power_w(self.power),
-            Quantity::Share => 0.01,
-            Quantity::Climb
-            | Quantity::Angle
-            | Quantity::Temperature
-            | Quantity::Rpm
-            | Quantity::Number
-            | Quantity::Count => 1.0,
-        }
-    }
-}
-
-/// The unit a suffix typed behind a figure stands for, in SI; `None` where it is no unit of this quantity.
-#[must_use]
-pub fn typed_unit_si(quantity: Quantity, suffix: &str) -> Option<f64> {
-    let of = |units: &[(&str, f64)]| units.iter().find(|u| u.0 == suffix).map(|u| u.1);
-    match quantity {
-        Quantity::Length => of(&[
-            ("mm", 0.001),
-            ("cm", 0.01),
-            ("m", 1.0),
-            ("in", length_m(LengthUnit::Inch)),
-            ("\"", length_m(LengthUnit::Inch)),
-            ("″", length_m(LengthUnit::Inch)),
-            ("inch", length_m(LengthUnit::Inch)),
-            ("ft", height_m(HeightUnit::Foot)),
-            ("'", height_m(HeightUnit::Foot)),
-            ("′", height_m(HeightUnit::Foot)),
-        ]),
-        Quantity::Height => {
-            let foot = height_m(HeightUnit::Foot);
-            of(&[("m", 1.0), ("km", 1000.0), ("ft", foot), ("feet", foot), ("'", foot), ("′", foot)])
-        }
-        Quantity::Speed => SpeedUnit::ALL.iter().find(|u| u.symbol() == suffix).map(|&u| speed_m_s(u)),
-        Quantity::Power => PowerUnit::ALL.iter().find(|u| u.symbol() == suffix).map(|&u| power_w(u)),
-        Quantity::Angle => of(&[("°", 1.0), ("deg", 1.0)]),
-        Quantity::Temperature => of(&[("K", 1.0), ("°C", 1.0)]),
-        Quantity::Rpm => of(&[("rpm", 1.0)]),
-        Quantity::Share => of(&[("%", 0.01)]),
-        _ => None,
-    }
-}
-
-#[cfg(test)]
-mod tests {
-    use super::*;
-
-    fn close(a: f64, b: f64) {
-        assert!((a - b).abs() <= 1e-9 * b.abs().max(1.0), "{a} is not {b}");
-    }
-
-    /// The library keeps the pound-force and the horsepower to seven digits.
-    fn seven_digits(a: f64, b: f64) {
-        assert!((a - b).abs() <= 1e-7 * b, "{a} is not {b}");
-    }
-
-    /// Defined values: inch 25.4 mm, knot 1852 m/h, mile 1609.344 m, pound-force 4.448 221 615 260 5 N.
-    #[test]
-    fn units_are_worth_what_they_are_defined_as() {
-        close(length_m(LengthUnit::Inch), 0.0254);
-        close(speed_m_s(SpeedUnit::Knot), 1852.0 / 3600.0);
-        close(speed_m_s(SpeedUnit::MilePerHour), 1609.344 / 3600.0);
-        seven_digits(force_n(ForceUnit::PoundForce), 4.448_221_615_260_5);
-        close(force_n(ForceUnit::KilogramForce), 9.806_65);
-        seven_digits(torque_n_m(TorqueUnit::PoundFoot), 4.448_221_615_260_5 * 0.3048);
-        seven_digits(power_w(PowerUnit::Horsepower), 550.0 * 0.3048 * 4.448_221_615_260_5);
-    }
-
-    #[test]
-    fn shown_and_back_is_the_same() {
-        let units = Units { length: LengthUnit::Inch, speed: SpeedUnit::Knot, ..Units::default() };
-        for q in [Quantity::Length, Quantity::Speed, Quantity::Share, Quantity::Grading, Quantity::Angle] {
-            close(units.si(q, units.shown(q, 12.34)), 12.34);
-        }
-    }
-
-    #[test]
-    fn a_typed_unit_is_known_only_for_its_quantity() {
-        close(typed_unit_si(Quantity::Length, "in").unwrap(), 0.0254);
-        assert!(typed_unit_si(Quantity::Speed, "in").is_none());
-        close(typed_unit_si(Quantity::Power, "kW").unwrap(), 1000.0);
-    }
-
-    #[test]
-    fn a_small_propeller_is_read_in_watts() {
-        assert_eq!(Units::suiting(0.3).power, PowerUnit::Watt);
-        assert_eq!(Units::suiting(1.5).power, PowerUnit::Kilowatt);
+        worth::worth(self, quantity)
     }
 }

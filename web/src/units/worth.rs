@@ -1,9 +1,11 @@
 //! What one of each unit is worth in SI, by the factors of the `uom` crate.
 
-use uom::si::f64::{Force, Length, Power, Torque, Velocity};
-use uom::si::{force, length, power, torque, velocity};
+use uom::si::f64::{Area, Force, Length, Mass, Power, Torque, Velocity};
+use uom::si::{area, force, length, mass, power, torque, velocity};
 
-use super::{ForceUnit, HeightUnit, LengthUnit, PowerUnit, SpeedUnit, TorqueUnit};
+use super::{
+    AreaUnit, ForceUnit, HeightUnit, LengthUnit, MassUnit, PowerUnit, Quantity, SpeedUnit, TorqueUnit, Units,
+};
 
 pub(super) fn length_m(unit: LengthUnit) -> f64 {
     match unit {
@@ -55,4 +57,49 @@ pub(super) fn torque_n_m(unit: TorqueUnit) -> f64 {
         TorqueUnit::PoundFoot => Torque::new::<torque::pound_force_foot>(1.0),
     }
     .get::<torque::newton_meter>()
+}
+
+pub(super) fn mass_kg(unit: MassUnit) -> f64 {
+    match unit {
+        MassUnit::Kilogram => Mass::new::<mass::kilogram>(1.0),
+        MassUnit::Pound => Mass::new::<mass::pound>(1.0),
+    }
+    .get::<mass::kilogram>()
+}
+
+pub(super) fn area_m2(unit: AreaUnit) -> f64 {
+    match unit {
+        AreaUnit::SquareMetre => Area::new::<area::square_meter>(1.0),
+        AreaUnit::SquareFoot => Area::new::<area::square_foot>(1.0),
+    }
+    .get::<area::square_meter>()
+}
+
+/// Fuel for an hour of a unit of power, kg per kWh: pounds go with horsepower.
+fn consumption_kg_per_kwh(unit: MassUnit) -> f64 {
+    match unit {
+        MassUnit::Kilogram => 1.0,
+        MassUnit::Pound => mass_kg(unit) / (power_w(PowerUnit::Horsepower) / 1000.0),
+    }
+}
+
+/// One of the unit shown, in SI or in the unit of the job file.
+pub(super) fn worth(units: Units, quantity: Quantity) -> f64 {
+    let foot_m = || height_m(HeightUnit::Foot);
+    match quantity {
+        Quantity::Length => length_m(units.length),
+        Quantity::Height => height_m(units.height),
+        Quantity::Speed => speed_m_s(units.speed),
+        Quantity::Climb if units.height == HeightUnit::Foot => foot_m() / 60.0,
+        Quantity::Grading if units.force == ForceUnit::PoundForce => force_n(units.force) / foot_m(),
+        Quantity::Force | Quantity::Grading => force_n(units.force),
+        Quantity::Torque => torque_n_m(units.torque),
+        Quantity::Power => power_w(units.power),
+        Quantity::Mass | Quantity::FuelFlow => mass_kg(units.mass),
+        Quantity::Area => area_m2(units.area),
+        Quantity::Consumption => consumption_kg_per_kwh(units.mass),
+        Quantity::Share => 0.01,
+        Quantity::Resistance => 0.001,
+        _ => 1.0,
+    }
 }

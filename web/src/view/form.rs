@@ -134,6 +134,9 @@ pub struct LabelledProps {
     /// Whether it is a text rather than a figure.
     #[prop_or_default]
     pub is_text: bool,
+    /// What stands in the empty box.
+    #[prop_or_default]
+    pub hint: AttrValue,
 }
 
 /// A box with its label, unit and message.
@@ -142,7 +145,7 @@ pub fn Labelled(props: &LabelledProps) -> Html {
     html! {
         <div class="labelled">
             <span class="label">{ &props.label }</span>
-            <Entry shown={props.shown.clone()} is_text={props.is_text} />
+            <Entry shown={props.shown.clone()} is_text={props.is_text} hint={props.hint.clone()} />
             <span class="unit">{ props.shown.unit }</span>
             <Message shown={props.shown.clone()} />
         </div>

@@ -7,6 +7,7 @@ pub mod coefficients;
 pub mod drop;
 pub mod form;
 pub mod head;
+pub mod machine;
 pub mod mark;
 pub mod method;
 pub mod notice;

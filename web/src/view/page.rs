@@ -7,6 +7,9 @@ use yew::prelude::*;
 use super::blade::{BladeSettings, StationTable, in_a_line};
 use super::coefficients::{self, Coefficients};
 use super::head::Head;
+use super::machine::aircraft::same_aircraft;
+use super::machine::engine::same_engine;
+use super::machine::{AircraftPanel, EnginePanel, aircraft_in_a_line, engine_in_a_line};
 use super::method::MethodPanel;
 use super::notice::Said;
 use super::panel::Panel;
@@ -16,12 +19,12 @@ use super::room::{Room, use_room};
 use super::sections::{self, Sections};
 use super::steps::Steps;
 use super::verdict::Verdict;
-use super::{Seen, caution};
+use super::{Seen, caution, use_act};
 use crate::app::{Later, Now};
 use crate::chart::hatch::Hatches;
 use crate::editor::Curves;
 use crate::number::{NO_FIGURE, fixed};
-use crate::state::State;
+use crate::state::{Action, Part, State};
 
 /// Properties of [`Page`].
 #[derive(Properties, PartialEq)]
@@ -79,17 +82,24 @@ impl Clone for PageProps {
 #[component]
 fn Panels(props: &PageProps) -> Html {
     let (state, now, later) = (&props.state, &props.now, &props.later);
-    let open = use_memo((), |()| wide());
+    let (act, open) = (use_act(), use_memo((), |()| wide()));
     let job = state.job();
     let answered =
         later.points.iter().filter(|p| p.as_ref().as_ref().is_some_and(|r| r.rpm.is_some())).count();
     html! {
         <>
-            <Panel id="points" number={1} title="Flight points" open={*open}
+            <Panel id="aircraft" number={1} title="Aircraft" result={aircraft_in_a_line(state)} open={*open}>
+                <AircraftPanel state={state.part(same_aircraft)} />
+            </Panel>
+            <Panel id="engine" number={2} title="Engine" result={engine_in_a_line(state)} open={*open}
+                onunfold={act.on(|open| Action::Unfold(Part::Engine, open))}>
+                <EnginePanel state={state.part(same_engine)} offer={later.offer.clone()} point={later.selected()} />
+            </Panel>
+            <Panel id="points" number={3} title="Flight points" open={*open}
                 result={points_line(job.flight_points.len(), answered, later.points.len())}>
                 <Points state={state.part(same_points)} results={later.points.clone()} />
             </Panel>
-            <Panel id="blade" number={2} title="Blade" result={in_a_line(job, state.units)} open={*open}>
+            <Panel id="blade" number={4} title="Blade" result={in_a_line(job, state.units)} open={*open}>
                 <BladeSettings state={state.part(same_settings)} />
                 <div class="blade-grid">
                     <div class="blade-table">
@@ -98,14 +108,14 @@ fn Panels(props: &PageProps) -> Html {
                     <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} />
                 </div>
             </Panel>
-            <Panel id="coefficients" number={3} title="Coefficients" open={*open}
+            <Panel id="coefficients" number={5} title="Coefficients" open={*open}
                 result={coefficients::in_a_line((*now.point).as_ref())}>
                 <Coefficients curves={later.curves.clone()} point={later.selected()} units={state.units} />
             </Panel>
-            <Panel id="sections" number={4} title="Sections" result={sections::in_a_line(state)} open={*open}>
+            <Panel id="sections" number={6} title="Sections" result={sections::in_a_line(state)} open={*open}>
                 <Sections state={state.part(sections::same)} rig={later.rig.clone()} points={later.points.clone()} />
             </Panel>
-            <Panel id="method" number={5} title="How it is computed" result={method_line(props)} open={*open}>
+            <Panel id="method" number={7} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>

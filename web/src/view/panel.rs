@@ -15,6 +15,9 @@ pub struct PanelProps {
     pub result: AttrValue,
     /// Whether it is open at first.
     pub open: bool,
+    /// Told when it opens or closes, and how it starts.
+    #[prop_or_default]
+    pub onunfold: Callback<bool>,
     /// What it holds.
     pub children: Html,
 }
@@ -22,8 +25,15 @@ pub struct PanelProps {
 /// A panel.
 #[component]
 pub fn Panel(props: &PanelProps) -> Html {
+    {
+        let (told, open) = (props.onunfold.clone(), props.open);
+        use_effect_with((), move |()| told.emit(open));
+    }
+    let ontoggle = props.onunfold.reform(|e: Event| {
+        e.target_dyn_into::<web_sys::Element>().is_some_and(|panel| panel.has_attribute("open"))
+    });
     html! {
-        <details class="panel" id={props.id.clone()} open={props.open}>
+        <details class="panel" id={props.id.clone()} open={props.open} {ontoggle}>
             <summary>
                 <span class="panel-number">{ props.number }</span>
                 <h2>{ &props.title }</h2>

@@ -4,13 +4,15 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 6] = [
+pub const PARTS: [(&str, &str); 8] = [
     ("departure", "Departure"),
-    ("points", "1 Flight points"),
-    ("blade", "2 Blade"),
-    ("coefficients", "3 Coefficients"),
-    ("sections", "4 Sections"),
-    ("method", "5 Method"),
+    ("aircraft", "1 Aircraft"),
+    ("engine", "2 Engine"),
+    ("points", "3 Flight points"),
+    ("blade", "4 Blade"),
+    ("coefficients", "5 Coefficients"),
+    ("sections", "6 Sections"),
+    ("method", "7 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.

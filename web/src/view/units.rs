@@ -5,7 +5,9 @@ use yew::prelude::*;
 use super::form::Pick;
 use super::use_act;
 use crate::state::Action;
-use crate::units::{ForceUnit, HeightUnit, LengthUnit, PowerUnit, SpeedUnit, TorqueUnit, Units};
+use crate::units::{
+    AreaUnit, ForceUnit, HeightUnit, LengthUnit, MassUnit, PowerUnit, SpeedUnit, TorqueUnit, Units,
+};
 
 /// Properties of [`UnitPicks`].
 #[derive(Properties, PartialEq)]
@@ -40,6 +42,8 @@ pub fn UnitPicks(props: &UnitPicksProps) -> Html {
             { list!(act, units, "Power", power, PowerUnit) }
             { list!(act, units, "Torque", torque, TorqueUnit) }
             { list!(act, units, "Height", height, HeightUnit) }
+            { list!(act, units, "Mass and fuel", mass, MassUnit) }
+            { list!(act, units, "Wing area", area, AreaUnit) }
         </div>
     }
 }

@@ -43,8 +43,15 @@ fn span(layout: &Layout, span: &Span) -> Html {
     let class = match span.kind {
         SpanKind::Working => "working-band is-edged",
         SpanKind::Stalled => "stalled is-quiet",
+        SpanKind::Past => "past-limit",
     };
-    html! { <rect {class} x={px(from)} y={px(layout.top)} width={px((to - from).max(0.0))} height={px(layout.height())} /> }
+    let edge = span.kind == SpanKind::Past && layout.x.holds(span.x.0);
+    html! {
+        <>
+            <rect {class} x={px(from)} y={px(layout.top)} width={px((to - from).max(0.0))} height={px(layout.height())} />
+            if edge { <line class="limit" x1={px(from)} x2={px(from)} y1={px(layout.top)} y2={px(layout.low)} /> }
+        </>
+    }
 }
 
 fn limit(layout: &Layout, limit: &Limit) -> Html {

@@ -1,7 +1,7 @@
 //! Names on the curves and words at the points, each where it hides least.
 
 use super::layout::Layout;
-use super::{LineChartProps, Point, Series, heading};
+use super::{LineChartProps, Point, Series, SpanKind, heading};
 use crate::chart::axis::px;
 use crate::chart::clear::Clear;
 use yew::prelude::*;
@@ -111,10 +111,12 @@ pub(super) fn names(layout: &Layout, props: &LineChartProps) -> Html {
 fn span_name(layout: &Layout, span: &super::Span, clear: &mut Clear) -> Option<Html> {
     let half = half_size(&span.words);
     let (from, to) = (layout.x.px(layout.x.held(span.x.0)), layout.x.px(layout.x.held(span.x.1)));
-    if span.words.is_empty() || to - from < 2.0 * half[0] {
+    let past = span.kind == SpanKind::Past;
+    if span.words.is_empty() || (!past && to - from < 2.0 * half[0]) || (past && !layout.x.holds(span.x.0)) {
         return None;
     }
-    let x = from + half[0] + 4.0;
+    // The name of a limit stands on its near side, where there is room.
+    let x = if past { from - half[0] - 4.0 } else { from + half[0] + 4.0 };
     let heights = [layout.low - 11.0, layout.top + 11.0];
     let room = |y: &f64| clear.room([x, *y], half, ENOUGH);
     let y = heights.into_iter().max_by(|a, b| room(a).total_cmp(&room(b)))?;

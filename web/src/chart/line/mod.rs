@@ -79,6 +79,8 @@ pub enum SpanKind {
     Working,
     /// Stalled.
     Stalled,
+    /// Past a limit at its start.
+    Past,
 }
 
 /// A span along x over the whole height.

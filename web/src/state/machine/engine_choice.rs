@@ -1,0 +1,153 @@
+//! What is picked of the engine, and the rows of its full-throttle curve that come and go.
+
+use spokeshave::job::{AltitudeLaw, Engine, HeldTo, HeldToKind, Interpolation, Job, Piston, PowerPoint};
+
+use super::example_of;
+
+/// Kinds of engine.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum EngineKind {
+    /// None: flight points need an rpm or a power.
+    None,
+    /// A piston engine.
+    Piston,
+    /// A motor with controller and battery.
+    Electric,
+}
+
+impl EngineKind {
+    /// Every kind, in the order shown.
+    pub const ALL: [Self; 3] = [Self::Piston, Self::Electric, Self::None];
+
+    /// The kind a job has.
+    #[must_use]
+    pub fn of(engine: Option<&Engine>) -> Self {
+        match engine {
+            None => Self::None,
+            Some(Engine::Piston(_)) => Self::Piston,
+            Some(Engine::Electric(_)) => Self::Electric,
+        }
+    }
+
+    /// What it is called.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::None => "none",
+            Self::Piston => "piston engine",
+            Self::Electric => "electric motor",
+        }
+    }
+}
+
+/// How power falls with height.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum AltitudeKind {
+    /// With density from the ground up.
+    Falling,
+    /// Held up to a height.
+    HeldTo,
+}
+
+impl AltitudeKind {
+    /// Every kind, in the order shown.
+    pub const ALL: [Self; 2] = [Self::Falling, Self::HeldTo];
+
+    /// What it is called.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::Falling => "naturally aspirated",
+            Self::HeldTo => "held up to a height",
+        }
+    }
+
+    /// The kind of a law.
+    #[must_use]
+    pub fn of(law: &AltitudeLaw) -> Self {
+        match law {
+            AltitudeLaw::NaturallyAspirated => Self::Falling,
+            AltitudeLaw::HeldTo(_) => Self::HeldTo,
+        }
+    }
+
+    fn started(self) -> AltitudeLaw {
+        match self {
+            Self::Falling => AltitudeLaw::NaturallyAspirated,
+            Self::HeldTo => AltitudeLaw::HeldTo(HeldTo { kind: HeldToKind::HeldTo, altitude_m: 2_000.0 }),
+        }
+    }
+}
+
+/// What is picked of the engine.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum EngineChoice {
+    /// Its kind.
+    Kind(EngineKind),
+    /// How the curve runs between its rows.
+    Interpolation(Interpolation),
+    /// How power falls with height.
+    Altitude(AltitudeKind),
+    /// A row more in the full-throttle curve, after this one.
+    AddRow(usize),
+    /// A row less.
+    RemoveRow(usize),
+}
+
+impl EngineChoice {
+    /// What the step is called.
+    pub(in crate::state) fn name(self) -> String {
+        match self {
+            Self::Kind(_) => "kind of engine".into(),
+            Self::Interpolation(_) => "curve between its rows".into(),
+            Self::Altitude(_) => "power at height".into(),
+            Self::AddRow(i) => format!("add a row after row {} of the curve", i + 1),
+            Self::RemoveRow(i) => format!("remove row {} of the curve", i + 1),
+        }
+    }
+
+    /// Makes the change.
+    ///
+    /// # Errors
+    /// Why it cannot be.
+    pub(in crate::state) fn apply(self, job: &mut Job) -> Result<(), String> {
+        match (self, &mut job.engine) {
+            (Self::Kind(kind), engine) if kind == EngineKind::of(engine.as_ref()) => {}
+            (Self::Kind(kind), _) => job.engine = started(kind, job),
+            (Self::Interpolation(to), Some(Engine::Piston(p))) => p.interpolation = to,
+            (Self::Altitude(to), Some(Engine::Piston(p))) => {
+                if to != AltitudeKind::of(&p.altitude_law) {
+                    p.altitude_law = to.started();
+                }
+            }
+            (Self::AddRow(i), Some(Engine::Piston(p))) => return add_row(p, i),
+            (Self::RemoveRow(i), Some(Engine::Piston(p))) => {
+                return crate::state::choice::remove(&mut p.full_throttle, i, 2, "A curve needs two rows.");
+            }
+            _ => return Err("The job has no such engine.".into()),
+        }
+        Ok(())
+    }
+}
+
+/// An engine of a kind to start from, an example's.
+fn started(kind: EngineKind, job: &Job) -> Option<Engine> {
+    example_of(job, |example| example.engine.filter(|e| EngineKind::of(Some(e)) == kind))
+}
+
+/// A row on the curve halfway to the next one; after the last one as far on as that lies from the one before.
+fn add_row(piston: &mut Piston, after: usize) -> Result<(), String> {
+    let rows = &piston.full_throttle;
+    let Some(row) = rows.get(after) else { return Err("There is no such row.".into()) };
+    let new = match (rows.get(after + 1), after.checked_sub(1).map(|i| &rows[i])) {
+        (Some(next), _) => between(row, next),
+        (None, Some(before)) => PowerPoint { rpm: 2.0 * row.rpm - before.rpm, power_w: row.power_w },
+        (None, None) => return Err("A curve needs two rows.".into()),
+    };
+    piston.full_throttle.insert(after + 1, new);
+    Ok(())
+}
+
+fn between(a: &PowerPoint, b: &PowerPoint) -> PowerPoint {
+    PowerPoint { rpm: f64::midpoint(a.rpm, b.rpm), power_w: f64::midpoint(a.power_w, b.power_w) }
+}
