@@ -3,6 +3,7 @@
 mod access;
 mod input;
 mod job;
+mod machine;
 mod native_save;
 mod opening;
 mod rescue;

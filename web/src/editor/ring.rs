@@ -10,7 +10,7 @@ use yew::prelude::*;
 use super::pull::{Pull, pressed};
 use crate::chart::axis::px;
 use crate::number::plain;
-use crate::state::{Action, Measure};
+use crate::state::{Action, Held, Measure};
 use crate::view::form::capital;
 use crate::view::{Act, use_act};
 
@@ -90,7 +90,7 @@ fn taken(props: &RingProps, act: &Act) -> Callback<PointerEvent> {
             let _ = ring.set_pointer_capture(e.pointer_id());
         }
         *pull.borrow_mut() = Some(Pull { station, measure, y_px: f64::from(e.client_y()), value });
-        act.send(Action::Take(station, measure));
+        act.send(Action::Take(Held::Station(station, measure)));
     })
 }
 
@@ -123,7 +123,9 @@ fn keys(props: &RingProps, act: &Act) -> Callback<KeyboardEvent> {
     let (act, pull) = (act.clone(), props.hand.pull.clone());
     let (station, measure, value, count) = (props.station, props.measure, props.value, props.count);
     Callback::from(move |e: KeyboardEvent| {
-        let nudge = |upward| Action::Nudge(station, measure, pressed(measure, value, upward, e.shift_key()));
+        let nudge = |upward| {
+            Action::Nudge(Held::Station(station, measure), pressed(measure, value, upward, e.shift_key()))
+        };
         let action = match e.key().as_str() {
             "ArrowUp" => nudge(true),
             "ArrowDown" => nudge(false),

@@ -1,6 +1,6 @@
 //! What can happen on the page.
 
-use super::{Choice, Field, Measure, Notice, Part, Running, Theme};
+use super::{Choice, Field, Held, Notice, Part, Running, Theme};
 use crate::units::Units;
 
 /// What can happen.
@@ -23,7 +23,7 @@ pub enum Action {
     /// One station inward.
     Inward,
     /// A ring was taken.
-    Take(usize, Measure),
+    Take(Held),
     /// The ring taken is here, SI.
     DragTo(f64),
     /// The ring was let go.
@@ -31,7 +31,7 @@ pub enum Action {
     /// The ring goes back.
     PutBack,
     /// A ring was moved by a key to here, SI.
-    Nudge(usize, Measure, f64),
+    Nudge(Held, f64),
     /// The run of key presses is over.
     EndRun,
     /// So many stations on either side follow.

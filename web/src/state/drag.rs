@@ -1,4 +1,4 @@
-//! Dragging one figure of a station while its neighbours follow.
+//! Dragging one figure: of a station, while its neighbours follow, or the airspeed of a flight point.
 
 use std::f64::consts::PI;
 use std::rc::Rc;
@@ -7,15 +7,46 @@ use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::job::Job;
 use spokeshave::rig::Rig;
 
-use super::{Field, Measure};
+use super::{Field, Measure, PointFigure};
+
+/// What is dragged.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum Held {
+    /// A measure of a station.
+    Station(usize, Measure),
+    /// The airspeed of a flight point.
+    Airspeed(usize),
+}
+
+impl Held {
+    /// The figure of the job that is dragged.
+    #[must_use]
+    pub fn field(self) -> Field {
+        match self {
+            Self::Station(station, measure) => Field::Station(station, measure),
+            Self::Airspeed(point) => Field::Point(point, PointFigure::Airspeed),
+        }
+    }
+
+    /// The job with what is held at a value (SI or degrees), `span` stations on either side drawn along; `None` where that
+    /// is not allowed.
+    #[must_use]
+    pub fn moved(self, job: &Job, value: f64, span: usize) -> Option<Job> {
+        match self {
+            Self::Station(station, measure) => dragged(job, station, measure, value, span),
+            Self::Airspeed(_) => {
+                let mut next = job.clone();
+                (self.field().write(&mut next, value) && next.check().is_empty()).then_some(next)
+            }
+        }
+    }
+}
 
 /// A drag that has begun.
 #[derive(Clone, Debug)]
 pub struct Drag {
-    /// The station.
-    pub station: usize,
     /// What is dragged.
-    pub measure: Measure,
+    pub held: Held,
     /// The job before it.
     pub start: Rc<Job>,
 }

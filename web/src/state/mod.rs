@@ -23,7 +23,7 @@ use spokeshave::job::{DEMOS, Job};
 
 pub use action::Action;
 pub use choice::{Choice, ControlKind, Running, SettingKind};
-pub use drag::{Drag, drawn, follows};
+pub use drag::{Drag, Held, drawn, follows};
 pub use entry::{Draft, Drafts, shown_text};
 pub use field::Field;
 pub use history::History;
@@ -240,9 +240,9 @@ impl State {
 
     fn drag(&mut self, action: &Action) {
         match *action {
-            Action::Take(station, measure) => {
-                self.station = station;
-                self.drag = Some(Drag { station, measure, start: self.job().clone() });
+            Action::Take(held) => {
+                self.select(held);
+                self.drag = Some(Drag { held, start: self.job().clone() });
             }
             Action::DragTo(value) => self.drag_to(value),
             Action::LetGo => self.let_go(),
@@ -251,14 +251,14 @@ impl State {
                     self.history.show(drag.start);
                 }
             }
-            Action::Nudge(station, measure, value) => self.nudge(station, measure, value),
+            Action::Nudge(held, value) => self.nudge(held, value),
             _ => self.history.end_run(),
         }
     }
 
     fn drag_to(&mut self, value: f64) {
         let Some(drag) = &self.drag else { return };
-        if let Some(job) = drag::dragged(&drag.start, drag.station, drag.measure, value, self.follow) {
+        if let Some(job) = drag.held.moved(&drag.start, value, self.follow) {
             self.history.show(Rc::new(job));
         }
     }
@@ -267,17 +267,25 @@ impl State {
         let Some(drag) = self.drag.take() else { return };
         let job = self.job().clone();
         self.history.show(drag.start);
-        let name = Field::Station(drag.station, drag.measure).name(&job);
+        let name = drag.held.field().name(&job);
         self.step(name, Rc::unwrap_or_clone(job));
         self.drafts.clear();
     }
 
-    fn nudge(&mut self, station: usize, measure: Measure, value: f64) {
-        self.station = station;
-        if let Some(job) = drag::dragged(self.job(), station, measure, value, self.follow) {
-            let field = Field::Station(station, measure);
+    fn nudge(&mut self, held: Held, value: f64) {
+        self.select(held);
+        if let Some(job) = held.moved(self.job(), value, self.follow) {
+            let field = held.field();
             let name = field.name(&job);
             self.history.small_step(name, job, field);
+        }
+    }
+
+    /// What is held is what is looked at.
+    fn select(&mut self, held: Held) {
+        match held {
+            Held::Station(station, _) => self.station = station,
+            Held::Airspeed(point) => self.point = point,
         }
     }
 

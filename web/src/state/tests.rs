@@ -151,7 +151,7 @@ fn a_text_that_was_not_changed_changes_nothing() {
 #[test]
 fn a_drag_is_one_step_and_neighbours_follow() {
     let before = start();
-    let held = before.after(Action::Take(7, Measure::Angle));
+    let held = before.after(Action::Take(Held::Station(7, Measure::Angle)));
     let state = [22.0, 22.5, 23.2].iter().fold(held, |s, &deg| s.after(Action::DragTo(deg)));
     assert!((angle_deg(&state, 7) - 23.2).abs() < 1e-9);
     assert!((angle_deg(&state, 6) - (angle_deg(&before, 6) + 1.0)).abs() < 1e-9);
@@ -163,7 +163,7 @@ fn a_drag_is_one_step_and_neighbours_follow() {
 
 #[test]
 fn a_drag_can_be_put_back_and_leaves_no_step() {
-    let state = start().after(Action::Take(3, Measure::Chord)).after(Action::DragTo(0.12));
+    let state = start().after(Action::Take(Held::Station(3, Measure::Chord))).after(Action::DragTo(0.12));
     let back = state.after(Action::PutBack);
     assert_eq!(**back.job(), **start().job());
     assert_eq!(back.history.undoes(), None);
@@ -171,13 +171,26 @@ fn a_drag_can_be_put_back_and_leaves_no_step() {
 
 #[test]
 fn a_drag_past_what_is_allowed_stops_there() {
-    let state = start().after(Action::Take(3, Measure::Angle)).after(Action::DragTo(40.0));
+    let state = start().after(Action::Take(Held::Station(3, Measure::Angle))).after(Action::DragTo(40.0));
     assert_eq!(**state.after(Action::DragTo(120.0)).job(), **state.job());
 }
 
 #[test]
+fn an_airspeed_dragged_is_one_step_and_selects_its_flight_point() {
+    let airspeed = |s: &State| s.job().flight_points[1].airspeed_m_s.unwrap();
+    let held = start().after(Action::Take(Held::Airspeed(1)));
+    let state = [31.0, 33.0, -4.0].iter().fold(held, |s, &v| s.after(Action::DragTo(v)));
+    assert_eq!((airspeed(&state), state.point), (33.0, 1), "below rest there is no airspeed");
+    let state = state.after(Action::LetGo);
+    assert_eq!(state.history.undoes(), Some("airspeed of Climb"));
+    assert_eq!(**state.after(Action::Undo).job(), **start().job());
+    let nudged = start().after(Action::Nudge(Held::Airspeed(1), 31.0));
+    assert_eq!(airspeed(&nudged.after(Action::Nudge(Held::Airspeed(1), 32.0)).after(Action::Undo)), 30.5);
+}
+
+#[test]
 fn a_run_of_key_presses_is_one_step() {
-    let nudge = |deg| Action::Nudge(7, Measure::Angle, deg);
+    let nudge = |deg| Action::Nudge(Held::Station(7, Measure::Angle), deg);
     let state = start().after(nudge(19.6)).after(nudge(19.7)).after(Action::EndRun).after(nudge(19.8));
     let once = state.after(Action::Undo);
     assert!((angle_deg(&once, 7) - 19.7).abs() < 1e-9);

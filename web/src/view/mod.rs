@@ -5,6 +5,7 @@ pub mod caution;
 pub mod chips;
 pub mod coefficients;
 pub mod drop;
+pub mod fit;
 pub mod form;
 pub mod head;
 pub mod machine;

@@ -1,5 +1,6 @@
 //! A line chart: curves with their names on them, points, limits, spans and upright flight points.
 
+pub mod grip;
 mod inside;
 mod labels;
 mod layout;
@@ -10,6 +11,7 @@ use super::axis::{bottom, left, most_on, placed, px};
 use super::figure::Figure;
 use super::unit::Unit;
 use super::width::use_width;
+use grip::{Grip, GripProps, Holder};
 use layout::Layout;
 use reading::{Reading, ReadingProps};
 use yew::prelude::*;
@@ -128,6 +130,9 @@ pub struct LineChartProps {
     /// Spans.
     #[prop_or_default]
     pub spans: Vec<Span>,
+    /// An upright line that can be moved along.
+    #[prop_or_default]
+    pub grip: Option<Grip>,
     /// Height, pixels.
     #[prop_or(220.0)]
     pub height: f64,
@@ -155,6 +160,7 @@ pub fn LineChart(props: &LineChartProps) -> Html {
                     { labels::names(&layout, props) }
                     <Reading ..reading />
                 </svg>
+                { props.grip.clone().map(|grip| html! { <Holder ..GripProps::new(&layout, grip, props.x.unit) /> }) }
             </div>
         </Figure>
     }

@@ -1,0 +1,121 @@
+//! The figures of the speed range that decide.
+
+use spokeshave::result::{Envelope, Mark};
+use yew::prelude::*;
+
+use crate::number::{NO_FIGURE, figure, fixed, with_unit};
+use crate::units::{Quantity, Units};
+
+/// Properties of [`Figures`].
+#[derive(Properties, PartialEq)]
+pub(super) struct FiguresProps {
+    pub(super) envelope: Envelope,
+    pub(super) units: Units,
+}
+
+/// A figure with its name and a line under it.
+struct Cell {
+    name: &'static str,
+    figure: String,
+    unit: &'static str,
+    more: String,
+}
+
+/// The figures in columns.
+#[component]
+pub(super) fn Figures(props: &FiguresProps) -> Html {
+    let cells = cells(&props.envelope, props.units).into_iter().map(|cell| {
+        html! {
+            <li>
+                <span class="verdict-name">{ cell.name }</span>
+                <span class="verdict-figure"><b>{ cell.figure }</b>
+                    if !cell.unit.is_empty() { <span class="unit">{ cell.unit }</span> }
+                </span>
+                <span class="verdict-more">{ cell.more }</span>
+            </li>
+        }
+    });
+    html! { <ul class="verdict fit-figures">{ for cells }</ul> }
+}
+
+fn cells(envelope: &Envelope, units: Units) -> Vec<Cell> {
+    let marks = &envelope.marks;
+    let standing = envelope.standing.as_ref();
+    let aeroplane = envelope.speeds.is_some();
+    let flight = [
+        marked(units, "Best climb", Quantity::Climb, marks.best_rate_of_climb),
+        marked(units, "Steepest climb", Quantity::Angle, marks.best_angle_of_climb),
+        speed(units, "Top speed", marks.top_speed),
+        long(units, "Longest range", marks.best_range, distance),
+    ];
+    let mut cells = vec![Cell {
+        name: "Standing start",
+        figure: figure(units, Quantity::Rpm, standing.map(|s| s.rpm)),
+        unit: units.symbol(Quantity::Rpm),
+        more: format!("thrust {}", with_unit(units, Quantity::Force, standing.map(|s| s.thrust_n))),
+    }];
+    if aeroplane {
+        cells.extend(flight);
+    }
+    cells.push(long(units, "Longest aloft", marks.best_endurance, |_, s| duration(s)));
+    cells
+}
+
+fn at(units: Units, mark: Option<Mark>) -> String {
+    mark.map_or_else(|| "no such speed".into(), |m| {
+        let (speed, rpm) = (
+            with_unit(units, Quantity::Speed, Some(m.airspeed_m_s)),
+            with_unit(units, Quantity::Rpm, Some(m.rpm)),
+        );
+        format!("at {speed}, {rpm}")
+    })
+}
+
+fn marked(units: Units, name: &'static str, quantity: Quantity, mark: Option<Mark>) -> Cell {
+    let value = mark.map(|m| m.value);
+    Cell { name, figure: figure(units, quantity, value), unit: units.symbol(quantity), more: at(units, mark) }
+}
+
+fn speed(units: Units, name: &'static str, mark: Option<Mark>) -> Cell {
+    let more = mark.map_or_else(|| "no level flight at full throttle".into(), |m| {
+        format!("at {}", with_unit(units, Quantity::Rpm, Some(m.rpm)))
+    });
+    Cell {
+        name,
+        figure: figure(units, Quantity::Speed, mark.map(|m| m.airspeed_m_s)),
+        unit: units.symbol(Quantity::Speed),
+        more,
+    }
+}
+
+fn long(units: Units, name: &'static str, mark: Option<Mark>, words: fn(Units, f64) -> (String, &'static str)) -> Cell {
+    let (figure, unit) = mark.map_or_else(|| (NO_FIGURE.into(), ""), |m| words(units, m.value));
+    let more = if mark.is_some() { at(units, mark) } else { "needs fuel or charge on board".into() };
+    Cell { name, figure, unit, more }
+}
+
+/// Hours and minutes.
+fn duration(seconds: f64) -> (String, &'static str) {
+    let minutes = (seconds / 60.0).round();
+    let hours = (minutes / 60.0).floor();
+    if hours >= 1.0 {
+        (format!("{} h {}", fixed(hours, 0), fixed(minutes - 60.0 * hours, 0)), "min")
+    } else {
+        (fixed(minutes, 0), "min")
+    }
+}
+
+fn distance(units: Units, metres: f64) -> (String, &'static str) {
+    (figure(units, Quantity::Distance, Some(metres)), units.symbol(Quantity::Distance))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::duration;
+
+    #[test]
+    fn times_are_hours_and_minutes() {
+        assert_eq!(duration(1_500.0), ("25".into(), "min"));
+        assert_eq!(duration(3.0 * 3600.0 + 59.0 * 60.0 + 40.0), ("4 h 0".into(), "min"));
+    }
+}

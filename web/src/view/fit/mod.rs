@@ -1,0 +1,89 @@
+//! The Fit panel: where propeller, engine and aircraft meet over the whole speed range.
+
+mod charts;
+mod figures;
+mod limits;
+
+use std::rc::Rc;
+
+use spokeshave::result::{Envelope, PointResult};
+use yew::prelude::*;
+
+use super::chips::air_words;
+use super::{Seen, caution};
+use crate::number::with_unit;
+use crate::state::State;
+use crate::units::Quantity;
+use charts::Charts;
+use figures::Figures;
+use limits::Limits;
+
+/// Properties of [`FitPanel`].
+#[derive(Properties, PartialEq)]
+pub struct FitPanelProps {
+    /// The state.
+    pub state: Seen,
+    /// The speed range at the flight point selected; may be a frame old, `None` where there is none.
+    pub envelope: Rc<Option<Envelope>>,
+    /// Every flight point worked out; may be a frame old.
+    pub points: Vec<Rc<Option<PointResult>>>,
+    /// Limit of propeller rpm.
+    pub limit_rpm: Option<f64>,
+    /// Whether there is something to show: the panel has been opened and the work is done.
+    pub ready: bool,
+}
+
+/// Whether the panel shows the same of two states.
+#[must_use]
+pub fn same_fit(a: &State, b: &State) -> bool {
+    a.job().flight_points == b.job().flight_points
+        && a.job().aircraft == b.job().aircraft
+        && a.job().propeller.stations.len() == b.job().propeller.stations.len()
+        && (a.point, a.station, a.units) == (b.point, b.station, b.units)
+}
+
+/// The fit in a line.
+#[must_use]
+pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
+    let Some(envelope) = envelope else { return "thrust and drag, rpm, power, climb over airspeed".into() };
+    let speed = |v| with_unit(state.units, Quantity::Speed, Some(v));
+    let top = envelope.marks.top_speed.map(|m| format!("level at {} on full throttle", speed(m.airspeed_m_s)));
+    let climb = envelope.marks.best_rate_of_climb.map(|m| {
+        format!("best climb {}", with_unit(state.units, Quantity::Climb, Some(m.value)))
+    });
+    let standing = envelope.standing.as_ref().map(|s| {
+        format!("{} standing still", with_unit(state.units, Quantity::Rpm, Some(s.rpm)))
+    });
+    [top, climb, standing].into_iter().flatten().collect::<Vec<_>>().join("; ")
+}
+
+/// Figures that decide, charts over one airspeed axis, a sentence for each limit.
+#[component]
+pub fn FitPanel(props: &FitPanelProps) -> Html {
+    let state = &props.state;
+    if !props.ready {
+        return html! { <p class="note" aria-busy="true">{ "Working out the speed range." }</p> };
+    }
+    let Some(envelope) = props.envelope.as_ref() else {
+        return html! { <p class="note">{ nothing(state) }</p> };
+    };
+    let air = state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
+    html! {
+        <div class="fit">
+            <p class="note">{ format!("The speed range{air}, the air of the flight point selected. Solid: full throttle. Dashed: level flight.") }</p>
+            <Figures envelope={envelope.clone()} units={state.units} />
+            <Charts state={state.clone()} envelope={props.envelope.clone()} points={props.points.clone()} limit_rpm={props.limit_rpm} />
+            <Limits envelope={envelope.clone()} limit_rpm={props.limit_rpm} units={state.units} />
+            { caution::fit() }
+        </div>
+    }
+}
+
+/// Why there is no speed range.
+fn nothing(state: &State) -> &'static str {
+    if state.job().engine.is_none() {
+        return "There is no engine to turn the propeller. Give one in the Engine panel.";
+    }
+    "At full throttle the engine does not turn this propeller at rest. A finer pitch, a smaller diameter or another gear \
+     ratio changes that."
+}
