@@ -7,7 +7,7 @@ use gloo_events::EventListener;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::fit::Offer;
 use spokeshave::job::Job;
-use spokeshave::result::PointResult;
+use spokeshave::result::{Envelope, PointResult};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 use wasm_bindgen::JsCast;
@@ -93,6 +93,8 @@ pub struct Later {
     pub curves: Rc<Vec<CurvePoint>>,
     /// What the shaft offers and the propeller takes there; empty while the Engine panel is closed.
     pub offer: Rc<Vec<Offer>>,
+    /// The speed range in its air; not there while the Fit panel is closed.
+    pub envelope: Option<Rc<Option<Envelope>>>,
 }
 
 impl Later {

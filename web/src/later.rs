@@ -37,6 +37,8 @@ pub enum Piece {
     Map,
     /// What the shaft offers and the propeller takes.
     Offer,
+    /// The speed range.
+    Envelope,
     /// Showing what has been worked out so far.
     Show,
 }
@@ -50,6 +52,7 @@ impl Plan {
         if !self.dragging {
             pieces.extend([Piece::Map, Piece::Curves]);
             pieces.extend(self.opened.engine.then_some(Piece::Offer));
+            pieces.extend(self.opened.fit.then_some(Piece::Envelope));
             pieces.push(Piece::Show);
         }
         pieces
@@ -106,6 +109,7 @@ impl Bench {
             Piece::Curves => drop(results.curves(self.plan.point)),
             Piece::Map => drop(results.map(self.plan.point)),
             Piece::Offer => drop(results.offer(self.plan.point)),
+            Piece::Envelope => drop(results.envelope(self.plan.point)),
             Piece::Show => {
                 let later = self.shown(&mut results, last && !self.plan.dragging);
                 drop(results);
@@ -124,7 +128,8 @@ impl Bench {
             return now;
         }
         let offer = if self.plan.opened.engine { results.offer(point) } else { Rc::default() };
-        Later { map: results.map(point), curves: results.curves(point), offer, ..now }
+        let envelope = self.plan.opened.fit.then(|| results.envelope(point));
+        Later { map: results.map(point), curves: results.curves(point), offer, envelope, ..now }
     }
 }
 
@@ -144,8 +149,10 @@ mod tests {
     #[test]
     fn a_closed_panel_is_not_worked_out() {
         let closed = Plan { count: 1, point: 0, dragging: false, opened: Opened::default() };
-        assert!(!closed.pieces().contains(&Piece::Offer));
-        let open = Plan { opened: Opened::default().with(Part::Engine, true), ..closed };
-        assert!(open.pieces().contains(&Piece::Offer));
+        for (part, piece) in [(Part::Engine, Piece::Offer), (Part::Fit, Piece::Envelope)] {
+            assert!(!closed.pieces().contains(&piece));
+            let open = Plan { opened: Opened::default().with(part, true), ..closed };
+            assert!(open.pieces().contains(&piece));
+        }
     }
 }

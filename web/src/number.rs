@@ -27,7 +27,9 @@ pub fn figure(units: Units, quantity: Quantity, si: Option<f64>) -> String {
     let Some(shown) = si.map(|si| units.shown(quantity, si)) else { return NO_FIGURE.into() };
     match quantity {
         // From a palm-size rotor to a light aeroplane: five orders of size.
-        Quantity::Force | Quantity::Grading | Quantity::Torque | Quantity::Power => significant(shown, 3),
+        Quantity::Force | Quantity::Grading | Quantity::Torque | Quantity::Power | Quantity::Distance => {
+            significant(shown, 3)
+        }
         _ => fixed(shown, units.decimals(quantity)),
     }
 }

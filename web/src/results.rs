@@ -6,7 +6,7 @@ use std::rc::Rc;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::{self, Offer};
 use spokeshave::job::{FlightPoint, Job};
-use spokeshave::result::{PointResult, SectionPoint};
+use spokeshave::result::{Envelope, PointResult, SectionPoint};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 
@@ -17,6 +17,8 @@ const MAP_RADII: u32 = 40;
 const CURVE_STEPS: u32 = 40;
 /// Speeds of rotation at which offer and demand of power are compared.
 const OFFER_STEPS: u32 = 48;
+/// Speeds of the fit's curves.
+const ENVELOPE_SPEEDS: u32 = 60;
 /// Results kept for each kind.
 const KEPT: usize = 64;
 
@@ -53,6 +55,8 @@ pub struct Results {
     maps: Shelf<FlightPoint, Option<DepartureMap>>,
     curves: Shelf<FlightPoint, Vec<CurvePoint>>,
     offers: Shelf<FlightPoint, Vec<Offer>>,
+    /// By height and temperature offset.
+    envelopes: Shelf<[f64; 2], Option<Envelope>>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
 }
 
@@ -110,6 +114,14 @@ impl Results {
     pub fn offer(&mut self, i: usize) -> Rc<Vec<Offer>> {
         let Some((rig, key)) = self.at(i) else { return Rc::default() };
         self.offers.get(&key, || fit::offer(&rig, i, OFFER_STEPS))
+    }
+
+    /// The speed range in a flight point's air, with the departure at every station.
+    pub fn envelope(&mut self, i: usize) -> Rc<Option<Envelope>> {
+        let Some((rig, point)) = self.at(i) else { return Rc::new(None) };
+        let fractions: Vec<f64> = rig.job.propeller.stations.iter().map(|s| s.radius_fraction).collect();
+        let air = [point.altitude_m, point.isa_offset_k];
+        self.envelopes.get(&air, || fit::envelope(&rig, &point, ENVELOPE_SPEEDS, &fractions))
     }
 
     /// Lift and drag of a station's section over angle at a flight point.

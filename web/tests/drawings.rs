@@ -10,6 +10,7 @@ use spokeshave_web::chart::line::{Axis, LineChart, Series};
 use spokeshave_web::chart::unit::Unit;
 use spokeshave_web::state::{Action, State};
 use spokeshave_web::view::Seen;
+use spokeshave_web::view::fit::FitPanel;
 use spokeshave_web::view::machine::{AircraftPanel, EnginePanel};
 use std::rc::Rc;
 use yew::prelude::*;
@@ -89,7 +90,7 @@ fn MapDrawing(shown: &Shown) -> Html {
 
 /// The page's state with an example and a flight point of it.
 fn state(shown: &Shown) -> State {
-    State::started(None).after(Action::Demo(shown.demo)).after(Action::SelectPoint(shown.point))
+    State::started(None, None).after(Action::Demo(shown.demo)).after(Action::SelectPoint(shown.point))
 }
 
 #[component]
@@ -104,6 +105,17 @@ fn MachinePanels(shown: &Shown) -> Html {
             <EnginePanel {state} {offer} {point} />
         </>
     }
+}
+
+#[component]
+fn SpeedRange(shown: &Shown) -> Html {
+    let state = Seen::new(Rc::new(state(shown)));
+    let rig = Rig::new(state.job()).expect("examples are valid");
+    let fractions: Vec<f64> = state.job().propeller.stations.iter().map(|s| s.radius_fraction).collect();
+    let envelope = spokeshave::fit::envelope(&rig, &state.job().flight_points[shown.point], 60, &fractions);
+    let points: Vec<_> = (0..state.job().flight_points.len()).map(|i| Rc::new(rig.point(i))).collect();
+    let limit_rpm = rig.shaft.as_ref().and_then(spokeshave::engine::Shaft::limit_rpm);
+    html! { <FitPanel {state} envelope={Some(Rc::new(envelope))} {points} {limit_rpm} /> }
 }
 
 #[component]
@@ -187,5 +199,18 @@ fn aircraft_and_engine_are_drawn_for_every_example_and_flight_point() {
         assert_eq!(text.contains("Remove row 5"), piston, "{shown:?}");
         assert_eq!(text.contains("Cells in series"), !piston, "{shown:?}");
         assert!(text.contains("full throttle") && text.contains("propeller at"), "{shown:?}");
+    }
+}
+
+#[test]
+fn the_speed_range_is_drawn_for_every_example_and_flight_point() {
+    for shown in everywhere() {
+        let job = job(&shown);
+        let text = drawn::<SpeedRange>(move || shown);
+        assert!(text.contains("Before you act"), "{shown:?}");
+        assert!(text.contains("Standing start") && text.contains("Propeller rpm"), "{shown:?}");
+        let movable = job.flight_points[shown.point].airspeed_m_s.is_some();
+        assert_eq!(text.matches("role=\"slider\"").count(), usize::from(movable), "{shown:?}");
+        assert_eq!(text.contains("Rate of climb"), shown.demo != 2, "{shown:?}");
     }
 }

@@ -6,7 +6,7 @@ use spokeshave::job::{Aircraft, AltitudeLaw, Engine};
 use super::*;
 
 fn start() -> State {
-    State::started(None)
+    State::started(None, None)
 }
 
 fn typed(state: &State, field: Field, text: &str) -> State {

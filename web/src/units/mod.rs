@@ -57,6 +57,8 @@ pub enum Quantity {
     Charge,
     /// Speed constant of a motor, rpm per volt.
     SpeedConstant,
+    /// Distance flown, m.
+    Distance,
     /// A coefficient, of three figures or more.
     Coefficient,
     /// A ratio of a few units, such as that of a gear.
@@ -143,6 +145,11 @@ impl Units {
             Quantity::Consumption => "kg/kWh",
             Quantity::FuelFlow if self.mass == MassUnit::Pound => "lb/h",
             Quantity::FuelFlow => "kg/h",
+            Quantity::Distance => match self.speed {
+                SpeedUnit::Knot => "NM",
+                SpeedUnit::MilePerHour => "mi",
+                SpeedUnit::KilometrePerHour | SpeedUnit::MetrePerSecond => "km",
+            },
             Quantity::Resistance => "mΩ",
             Quantity::Current => "A",
             Quantity::Voltage => "V",

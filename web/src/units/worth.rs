@@ -98,6 +98,9 @@ pub(super) fn worth(units: Units, quantity: Quantity) -> f64 {
         Quantity::Mass | Quantity::FuelFlow => mass_kg(units.mass),
         Quantity::Area => area_m2(units.area),
         Quantity::Consumption => consumption_kg_per_kwh(units.mass),
+        // As far as the unit of speed goes in an hour; metres a second go with kilometres.
+        Quantity::Distance if units.speed == SpeedUnit::MetrePerSecond => 1_000.0,
+        Quantity::Distance => 3_600.0 * speed_m_s(units.speed),
         Quantity::Share => 0.01,
         Quantity::Resistance => 0.001,
         _ => 1.0,

@@ -13,6 +13,18 @@ pub fn standing_start() -> Html {
     }
 }
 
+/// Before a figure of the fit is flown.
+pub fn fit() -> Html {
+    html! {
+        <aside class="caution">
+            <b>{ "Before you act. " }</b>
+            { "These are estimates for still air, one mass and an engine in good order. Leave margin on take-off, climb, range and \
+               rpm, and prove them step by step. Keep out of the disc plane on the ground. The flight manual, the engine maker's \
+               limits and your aviation authority's rules come before any figure here." }
+        </aside>
+    }
+}
+
 /// At the foot of the page.
 pub fn foot() -> Html {
     html! {

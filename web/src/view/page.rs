@@ -6,6 +6,7 @@ use yew::prelude::*;
 
 use super::blade::{BladeSettings, StationTable, in_a_line};
 use super::coefficients::{self, Coefficients};
+use super::fit::{self, FitPanel};
 use super::head::Head;
 use super::machine::aircraft::same_aircraft;
 use super::machine::engine::same_engine;
@@ -108,18 +109,26 @@ fn Panels(props: &PageProps) -> Html {
                     <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} />
                 </div>
             </Panel>
-            <Panel id="coefficients" number={5} title="Coefficients" open={*open}
+            <Panel id="fit" number={5} title="Fit" open={*open} onunfold={act.on(|open| Action::Unfold(Part::Fit, open))}
+                result={fit::in_a_line(state, later.envelope.as_ref().and_then(|e| e.as_ref().as_ref()))}>
+                <FitPanel state={state.part(fit::same_fit)} envelope={later.envelope.clone()} points={later.points.clone()} limit_rpm={limit_rpm(later)} />
+            </Panel>
+            <Panel id="coefficients" number={6} title="Coefficients" open={*open}
                 result={coefficients::in_a_line((*now.point).as_ref())}>
                 <Coefficients curves={later.curves.clone()} point={later.selected()} units={state.units} />
             </Panel>
-            <Panel id="sections" number={6} title="Sections" result={sections::in_a_line(state)} open={*open}>
+            <Panel id="sections" number={7} title="Sections" result={sections::in_a_line(state)} open={*open}>
                 <Sections state={state.part(sections::same)} rig={later.rig.clone()} points={later.points.clone()} />
             </Panel>
-            <Panel id="method" number={7} title="How it is computed" result={method_line(props)} open={*open}>
+            <Panel id="method" number={8} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>
     }
+}
+
+fn limit_rpm(later: &Later) -> Option<f64> {
+    later.rig.as_ref()?.0.shaft.as_ref()?.limit_rpm()
 }
 
 fn same_points(a: &State, b: &State) -> bool {

@@ -4,15 +4,16 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 8] = [
+pub const PARTS: [(&str, &str); 9] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
     ("points", "3 Flight points"),
     ("blade", "4 Blade"),
-    ("coefficients", "5 Coefficients"),
-    ("sections", "6 Sections"),
-    ("method", "7 Method"),
+    ("fit", "5 Fit"),
+    ("coefficients", "6 Coefficients"),
+    ("sections", "7 Sections"),
+    ("method", "8 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.

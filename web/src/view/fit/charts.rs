@@ -44,7 +44,8 @@ pub(super) fn Charts(props: &ChartsProps) -> Html {
         efficiency(props, envelope),
         departure(props, envelope),
     ];
-    let plots = plots.into_iter().filter(|p| p.series.iter().any(|s| s.points.iter().any(|at| at[1].is_finite())));
+    let plots =
+        plots.into_iter().filter(|p| p.series.iter().any(|s| s.points.iter().any(|at| at[1].is_finite())));
     let end = envelope.points.last().map_or(1.0, |p| p.airspeed_m_s);
     let one = |(i, plot): (usize, Plot)| {
         let x = Axis {
@@ -77,11 +78,7 @@ fn flown(p: &EnvelopePoint) -> Option<&spokeshave::result::Level> {
 }
 
 /// The flight point selected where it has this figure.
-fn chosen(
-    props: &ChartsProps,
-    quantity: Quantity,
-    of: impl Fn(&PointResult) -> Option<f64>,
-) -> Vec<Point> {
+fn chosen(props: &ChartsProps, quantity: Quantity, of: impl Fn(&PointResult) -> Option<f64>) -> Vec<Point> {
     let result = props.points.get(props.state.point).and_then(|r| r.as_ref().as_ref());
     let at = result.and_then(|r| Some([r.airspeed_m_s?, of(r)?]));
     let words = |y| figure(props.state.units, quantity, Some(y)).into();

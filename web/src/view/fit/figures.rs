@@ -62,13 +62,16 @@ fn cells(envelope: &Envelope, units: Units) -> Vec<Cell> {
 }
 
 fn at(units: Units, mark: Option<Mark>) -> String {
-    mark.map_or_else(|| "no such speed".into(), |m| {
-        let (speed, rpm) = (
-            with_unit(units, Quantity::Speed, Some(m.airspeed_m_s)),
-            with_unit(units, Quantity::Rpm, Some(m.rpm)),
-        );
-        format!("at {speed}, {rpm}")
-    })
+    mark.map_or_else(
+        || "no such speed".into(),
+        |m| {
+            let (speed, rpm) = (
+                with_unit(units, Quantity::Speed, Some(m.airspeed_m_s)),
+                with_unit(units, Quantity::Rpm, Some(m.rpm)),
+            );
+            format!("at {speed}, {rpm}")
+        },
+    )
 }
 
 fn marked(units: Units, name: &'static str, quantity: Quantity, mark: Option<Mark>) -> Cell {
@@ -77,9 +80,10 @@ fn marked(units: Units, name: &'static str, quantity: Quantity, mark: Option<Mar
 }
 
 fn speed(units: Units, name: &'static str, mark: Option<Mark>) -> Cell {
-    let more = mark.map_or_else(|| "no level flight at full throttle".into(), |m| {
-        format!("at {}", with_unit(units, Quantity::Rpm, Some(m.rpm)))
-    });
+    let more = mark.map_or_else(
+        || "no level flight at full throttle".into(),
+        |m| format!("at {}", with_unit(units, Quantity::Rpm, Some(m.rpm))),
+    );
     Cell {
         name,
         figure: figure(units, Quantity::Speed, mark.map(|m| m.airspeed_m_s)),
@@ -88,7 +92,12 @@ fn speed(units: Units, name: &'static str, mark: Option<Mark>) -> Cell {
     }
 }
 
-fn long(units: Units, name: &'static str, mark: Option<Mark>, words: fn(Units, f64) -> (String, &'static str)) -> Cell {
+fn long(
+    units: Units,
+    name: &'static str,
+    mark: Option<Mark>,
+    words: fn(Units, f64) -> (String, &'static str),
+) -> Cell {
     let (figure, unit) = mark.map_or_else(|| (NO_FIGURE.into(), ""), |m| words(units, m.value));
     let more = if mark.is_some() { at(units, mark) } else { "needs fuel or charge on board".into() };
     Cell { name, figure, unit, more }

@@ -35,7 +35,9 @@ fn sentences(props: &LimitsProps) -> Vec<String> {
         });
     }
     if envelope.marks.tip_mach_from.is_empty() {
-        said.push("The tip stays below the Mach numbers where propellers lose efficiency and grow loud.".into());
+        said.push(
+            "The tip stays below the Mach numbers where propellers lose efficiency and grow loud.".into(),
+        );
     }
     said
 }
@@ -49,9 +51,14 @@ fn rpm(props: &LimitsProps) -> String {
     );
     match envelope.marks.limit_rpm_from_m_s {
         Some(v) if v > 0.0 => {
-            format!("From {} on full throttle would take the engine past {limit}: it has to be throttled back.", speed(v))
+            format!(
+                "From {} on full throttle would take the engine past {limit}: it has to be throttled back.",
+                speed(v)
+            )
         }
-        Some(_) => format!("Even at rest full throttle takes the engine past {limit}: it has to be throttled back."),
+        Some(_) => {
+            format!("Even at rest full throttle takes the engine past {limit}: it has to be throttled back.")
+        }
         None if envelope.points.iter().any(|p| p.full_state == Answer::EngineCannotTurnIt) => {
             "At some speeds the engine cannot turn this propeller at any rpm of its curve.".into()
         }
@@ -63,8 +70,11 @@ fn stall(props: &LimitsProps) -> Option<String> {
     let stall = props.envelope.speeds?.stall_m_s?;
     let best = props.envelope.marks.best_angle_of_climb?.airspeed_m_s;
     let speed = |v| with_unit(props.units, Quantity::Speed, Some(v));
-    let near = best < 1.05 * stall;
-    near.then(|| {
-        format!("The steepest climb, at {}, lies at the stall of {}: keep above it.", speed(best), speed(stall))
+    (best <= stall).then(|| {
+        format!(
+            "The steepest climb, at {}, lies at the stall of {}: keep above it.",
+            speed(best),
+            speed(stall)
+        )
     })
 }

@@ -23,14 +23,12 @@ use limits::Limits;
 pub struct FitPanelProps {
     /// The state.
     pub state: Seen,
-    /// The speed range at the flight point selected; may be a frame old, `None` where there is none.
-    pub envelope: Rc<Option<Envelope>>,
+    /// The speed range in the air of the flight point selected; may be a frame old, not there before it is worked out.
+    pub envelope: Option<Rc<Option<Envelope>>>,
     /// Every flight point worked out; may be a frame old.
     pub points: Vec<Rc<Option<PointResult>>>,
     /// Limit of propeller rpm.
     pub limit_rpm: Option<f64>,
-    /// Whether there is something to show: the panel has been opened and the work is done.
-    pub ready: bool,
 }
 
 /// Whether the panel shows the same of two states.
@@ -47,13 +45,16 @@ pub fn same_fit(a: &State, b: &State) -> bool {
 pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
     let Some(envelope) = envelope else { return "thrust and drag, rpm, power, climb over airspeed".into() };
     let speed = |v| with_unit(state.units, Quantity::Speed, Some(v));
-    let top = envelope.marks.top_speed.map(|m| format!("level at {} on full throttle", speed(m.airspeed_m_s)));
-    let climb = envelope.marks.best_rate_of_climb.map(|m| {
-        format!("best climb {}", with_unit(state.units, Quantity::Climb, Some(m.value)))
-    });
-    let standing = envelope.standing.as_ref().map(|s| {
-        format!("{} standing still", with_unit(state.units, Quantity::Rpm, Some(s.rpm)))
-    });
+    let top =
+        envelope.marks.top_speed.map(|m| format!("level at {} on full throttle", speed(m.airspeed_m_s)));
+    let climb = envelope
+        .marks
+        .best_rate_of_climb
+        .map(|m| format!("best climb {}", with_unit(state.units, Quantity::Climb, Some(m.value))));
+    let standing = envelope
+        .standing
+        .as_ref()
+        .map(|s| format!("{} standing still", with_unit(state.units, Quantity::Rpm, Some(s.rpm))));
     [top, climb, standing].into_iter().flatten().collect::<Vec<_>>().join("; ")
 }
 
@@ -61,18 +62,19 @@ pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
 #[component]
 pub fn FitPanel(props: &FitPanelProps) -> Html {
     let state = &props.state;
-    if !props.ready {
-        return html! { <p class="note" aria-busy="true">{ "Working out the speed range." }</p> };
-    }
-    let Some(envelope) = props.envelope.as_ref() else {
+    let Some(known) = &props.envelope else {
+        return html! { <p class="note" aria-busy="true">{ "The speed range is worked out while this panel is open." }</p> };
+    };
+    let Some(envelope) = known.as_ref() else {
         return html! { <p class="note">{ nothing(state) }</p> };
     };
-    let air = state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
+    let air =
+        state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
     html! {
         <div class="fit">
             <p class="note">{ format!("The speed range{air}, the air of the flight point selected. Solid: full throttle. Dashed: level flight.") }</p>
             <Figures envelope={envelope.clone()} units={state.units} />
-            <Charts state={state.clone()} envelope={props.envelope.clone()} points={props.points.clone()} limit_rpm={props.limit_rpm} />
+            <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()} limit_rpm={props.limit_rpm} />
             <Limits envelope={envelope.clone()} limit_rpm={props.limit_rpm} units={state.units} />
             { caution::fit() }
         </div>

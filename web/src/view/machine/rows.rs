@@ -19,8 +19,9 @@ pub(super) struct CurveRowsProps {
 pub(super) fn CurveRows(props: &CurveRowsProps) -> Html {
     let state = &props.state;
     let Some(Engine::Piston(piston)) = &state.job().engine else { return html! {} };
-    let rows = (0..piston.full_throttle.len())
-        .map(|i| html! { <CurveRow key={i} index={i} state={state.clone()} /> });
+    let count = piston.full_throttle.len();
+    let rows =
+        (0..count).map(|i| html! { <CurveRow key={i} index={i} few={count <= 2} state={state.clone()} /> });
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="Full-throttle curve">
             <table class="sheet-table curve-rows">
@@ -40,6 +41,8 @@ pub(super) fn CurveRows(props: &CurveRowsProps) -> Html {
 #[derive(Properties, PartialEq)]
 struct CurveRowProps {
     index: usize,
+    /// Whether no row may go.
+    few: bool,
     state: Seen,
 }
 
@@ -61,7 +64,7 @@ fn CurveRow(props: &CurveRowProps) -> Html {
                 <td>
                     <button type="button" class="icon" aria-label={format!("Add a row after row {}", i + 1)}
                         onclick={choose(EngineChoice::AddRow(i))}>{ "+" }</button>
-                    <button type="button" class="icon" aria-label={format!("Remove row {}", i + 1)}
+                    <button type="button" class="icon" aria-label={format!("Remove row {}", i + 1)} disabled={props.few}
                         onclick={choose(EngineChoice::RemoveRow(i))}>{ "×" }</button>
                 </td>
             </tr>
