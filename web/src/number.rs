@@ -26,6 +26,11 @@ pub fn plain(value: f64, decimals: usize) -> String {
 pub fn figure(units: Units, quantity: Quantity, si: Option<f64>) -> String {
     let Some(shown) = si.map(|si| units.shown(quantity, si)) else { return NO_FIGURE.into() };
     match quantity {
+        // From grams to tonnes, and figures as they are given: no more decimals than they have.
+        Quantity::Mass | Quantity::Area | Quantity::Charge => {
+            let text = fixed(shown, 2);
+            text.trim_end_matches('0').trim_end_matches('.').into()
+        }
         // From a palm-size rotor to a light aeroplane: five orders of size.
         Quantity::Force | Quantity::Grading | Quantity::Torque | Quantity::Power | Quantity::Distance => {
             significant(shown, 3)

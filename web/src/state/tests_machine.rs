@@ -79,7 +79,7 @@ fn what_is_wrong_stays_as_typed_with_what_is_allowed() {
             "Allowed is above 2 000 and below 2 800 rpm, the rows beside it.",
         ),
         (Field::Engine(EngineFigure::CurveRpm(4)), "100", "Allowed is above 3 200 rpm, the row before."),
-        (FUEL, "much", "Not a number. It was 50.0 kg."),
+        (FUEL, "much", "Not a number. It was 50 kg."),
     ] {
         let state = typed(&start(), field, text);
         let draft = &state.drafts[&field];

@@ -28,7 +28,10 @@ fn open_space(layout: &Layout, props: &LineChartProps) -> Clear {
         clear.keep_off_points(dense(layout, series));
     }
     clear.keep_off_points(props.points.iter().map(|p| layout.place(p.at)));
-    clear.keep_off_uprights(props.uprights.iter().filter(|u| u.chosen).map(|u| layout.x.px(u.x)));
+    let past =
+        props.spans.iter().filter(|s| s.kind == SpanKind::Past && layout.x.holds(s.x.0)).map(|s| s.x.0);
+    let chosen = props.uprights.iter().filter(|u| u.chosen).map(|u| u.x);
+    clear.keep_off_uprights(past.chain(chosen).map(|x| layout.x.px(x)));
     clear
 }
 

@@ -57,7 +57,7 @@ fn chart(props: &AskedChartsProps, title: &'static str, what: &'static str, of: 
         .into_iter()
         .collect();
     let points_of = curve.iter().map(|p| [p.airspeed_m_s, of(p)]).collect();
-    let series = vec![Series { name: what.into(), points: points_of, stroke: Stroke::Dashed }];
+    let series = vec![Series { name: AttrValue::default(), points: points_of, stroke: Stroke::Dashed }];
     let x = Axis { words: "airspeed".into(), unit: speed, span: Some((0.0, last)) };
     let unit = if what == "drag" { force } else { power };
     let y = Axis { words: AttrValue::default(), unit, span: None };
