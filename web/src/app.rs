@@ -7,7 +7,7 @@ use gloo_events::EventListener;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::fit::Offer;
 use spokeshave::job::Job;
-use spokeshave::result::{Envelope, PointResult};
+use spokeshave::result::{Ceilings, Envelope, PointResult, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 use wasm_bindgen::JsCast;
@@ -95,6 +95,10 @@ pub struct Later {
     pub offer: Rc<Vec<Offer>>,
     /// The speed range in its air; not there while the Fit panel is closed.
     pub envelope: Option<Rc<Option<Envelope>>>,
+    /// Take-off there.
+    pub take_off: Option<TakeOff>,
+    /// Ceilings, which follow last.
+    pub ceilings: Option<Ceilings>,
 }
 
 impl Later {

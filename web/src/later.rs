@@ -39,8 +39,12 @@ pub enum Piece {
     Offer,
     /// The speed range.
     Envelope,
-    /// Showing what has been worked out so far.
+    /// The ceilings.
+    Ceilings,
+    /// Showing the flight points.
     Show,
+    /// Showing everything worked out so far.
+    ShowAll,
 }
 
 impl Plan {
@@ -53,7 +57,10 @@ impl Plan {
             pieces.extend([Piece::Map, Piece::Curves]);
             pieces.extend(self.opened.engine.then_some(Piece::Offer));
             pieces.extend(self.opened.fit.then_some(Piece::Envelope));
-            pieces.push(Piece::Show);
+            pieces.push(Piece::ShowAll);
+            if self.opened.fit {
+                pieces.extend([Piece::Ceilings, Piece::ShowAll]);
+            }
         }
         pieces
     }
@@ -94,7 +101,7 @@ impl Work {
 /// One piece now, the others each in a turn of its own.
 fn run(bench: &Rc<Bench>, pieces: Vec<Piece>, i: usize) {
     let Some(&piece) = pieces.get(i) else { return keep::after_work() };
-    bench.work(piece, i + 1 == pieces.len());
+    bench.work(piece);
     let (again, next) = (bench.clone(), bench.next.upgrade());
     if let Some(next) = next {
         *next.borrow_mut() = Some(Timeout::new(0, move || run(&again, pieces, i + 1)));
@@ -102,7 +109,7 @@ fn run(bench: &Rc<Bench>, pieces: Vec<Piece>, i: usize) {
 }
 
 impl Bench {
-    fn work(&self, piece: Piece, last: bool) {
+    fn work(&self, piece: Piece) {
         let mut results = self.results.borrow_mut();
         match piece {
             Piece::Point(i) => drop(results.point(i)),
@@ -110,8 +117,9 @@ impl Bench {
             Piece::Map => drop(results.map(self.plan.point)),
             Piece::Offer => drop(results.offer(self.plan.point)),
             Piece::Envelope => drop(results.envelope(self.plan.point)),
-            Piece::Show => {
-                let later = self.shown(&mut results, last && !self.plan.dragging);
+            Piece::Ceilings => results.work_ceilings(self.plan.point),
+            Piece::Show | Piece::ShowAll => {
+                let later = self.shown(&mut results, piece == Piece::ShowAll);
                 drop(results);
                 self.setter.set(Rc::new(later));
             }
@@ -129,7 +137,15 @@ impl Bench {
         }
         let offer = if self.plan.opened.engine { results.offer(point) } else { Rc::default() };
         let envelope = self.plan.opened.fit.then(|| results.envelope(point));
-        Later { map: results.map(point), curves: results.curves(point), offer, envelope, ..now }
+        Later {
+            map: results.map(point),
+            curves: results.curves(point),
+            offer,
+            take_off: envelope.as_ref().and_then(|_| results.take_off(point)),
+            ceilings: results.ceilings(point),
+            envelope,
+            ..now
+        }
     }
 }
 
@@ -143,7 +159,7 @@ mod tests {
         let plan = Plan { count: 2, point: 0, dragging: true, opened: Opened::default() };
         assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Show]);
         let all = Plan { dragging: false, ..plan }.pieces();
-        assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::Show]);
+        assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::ShowAll]);
     }
 
     #[test]

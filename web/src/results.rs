@@ -6,7 +6,7 @@ use std::rc::Rc;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::{self, Offer};
 use spokeshave::job::{FlightPoint, Job};
-use spokeshave::result::{Envelope, PointResult, SectionPoint};
+use spokeshave::result::{Ceilings, Envelope, PointResult, SectionPoint, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 
@@ -33,9 +33,13 @@ impl<K, V> Default for Shelf<K, V> {
 }
 
 impl<K: PartialEq + Clone, V> Shelf<K, V> {
+    fn known(&self, key: &K) -> Option<Rc<V>> {
+        self.0.iter().find(|(k, _)| k == key).map(|(_, value)| value.clone())
+    }
+
     fn get(&mut self, key: &K, make: impl FnOnce() -> V) -> Rc<V> {
-        if let Some((_, value)) = self.0.iter().find(|(k, _)| k == key) {
-            return value.clone();
+        if let Some(value) = self.known(key) {
+            return value;
         }
         if self.0.len() >= KEPT {
             self.0.remove(0);
@@ -57,6 +61,8 @@ pub struct Results {
     offers: Shelf<FlightPoint, Vec<Offer>>,
     /// By height and temperature offset.
     envelopes: Shelf<[f64; 2], Option<Envelope>>,
+    /// By temperature offset.
+    ceilings: Shelf<f64, Option<Ceilings>>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
 }
 
@@ -122,6 +128,26 @@ impl Results {
         let fractions: Vec<f64> = rig.job.propeller.stations.iter().map(|s| s.radius_fraction).collect();
         let air = [point.altitude_m, point.isa_offset_k];
         self.envelopes.get(&air, || fit::envelope(&rig, &point, ENVELOPE_SPEEDS, &fractions))
+    }
+
+    /// Take-off in a flight point's air.
+    pub fn take_off(&mut self, i: usize) -> Option<TakeOff> {
+        let envelope = self.envelope(i);
+        fit::take_off(self.rig.as_ref()?, envelope.as_ref().as_ref()?)
+    }
+
+    /// Works out the ceilings at a flight point's temperature offset.
+    pub fn work_ceilings(&mut self, i: usize) {
+        if let Some((rig, point)) = self.at(i) {
+            self.ceilings.get(&point.isa_offset_k, || fit::ceilings(&rig, point.isa_offset_k));
+        }
+    }
+
+    /// The ceilings, once they have been worked out.
+    #[must_use]
+    pub fn ceilings(&self, i: usize) -> Option<Ceilings> {
+        let (_, point) = self.at(i)?;
+        self.ceilings.known(&point.isa_offset_k).and_then(|c| *c)
     }
 
     /// Lift and drag of a station's section over angle at a flight point.

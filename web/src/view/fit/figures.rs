@@ -1,6 +1,6 @@
 //! The figures of the speed range that decide.
 
-use spokeshave::result::{Envelope, Mark};
+use spokeshave::result::{Ceilings, Envelope, Mark, TakeOff};
 use yew::prelude::*;
 
 use crate::number::{NO_FIGURE, figure, fixed, with_unit};
@@ -10,6 +10,8 @@ use crate::units::{Quantity, Units};
 #[derive(Properties, PartialEq)]
 pub(super) struct FiguresProps {
     pub(super) envelope: Envelope,
+    pub(super) take_off: Option<TakeOff>,
+    pub(super) ceilings: Option<Ceilings>,
     pub(super) units: Units,
 }
 
@@ -24,7 +26,7 @@ struct Cell {
 /// The figures in columns.
 #[component]
 pub(super) fn Figures(props: &FiguresProps) -> Html {
-    let cells = cells(&props.envelope, props.units).into_iter().map(|cell| {
+    let cells = cells(props).into_iter().map(|cell| {
         html! {
             <li>
                 <span class="verdict-name">{ cell.name }</span>
@@ -38,7 +40,8 @@ pub(super) fn Figures(props: &FiguresProps) -> Html {
     html! { <ul class="verdict fit-figures">{ for cells }</ul> }
 }
 
-fn cells(envelope: &Envelope, units: Units) -> Vec<Cell> {
+fn cells(props: &FiguresProps) -> Vec<Cell> {
+    let (envelope, units) = (&props.envelope, props.units);
     let marks = &envelope.marks;
     let standing = envelope.standing.as_ref();
     let aeroplane = envelope.speeds.is_some();
@@ -55,10 +58,45 @@ fn cells(envelope: &Envelope, units: Units) -> Vec<Cell> {
         more: format!("thrust {}", with_unit(units, Quantity::Force, standing.map(|s| s.thrust_n))),
     }];
     if aeroplane {
+        cells.push(take_off(units, props.take_off));
         cells.extend(flight);
+    }
+    if aeroplane {
+        cells.push(ceiling(units, props.ceilings));
     }
     cells.push(long(units, "Longest aloft", marks.best_endurance, |_, s| duration(s)));
     cells
+}
+
+fn take_off(units: Units, take_off: Option<TakeOff>) -> Cell {
+    let height = |m| with_unit(units, Quantity::Height, Some(m));
+    let more = take_off.map_or_else(
+        || "not reached, or no stall known".into(),
+        |t| {
+            format!(
+                "to {} high {}; friction {}",
+                height(15.0),
+                height(t.distance_to_15_m),
+                fixed(t.rolling_friction, 2)
+            )
+        },
+    );
+    Cell {
+        name: "Take-off run",
+        figure: figure(units, Quantity::Height, take_off.map(|t| t.ground_roll_m)),
+        unit: units.symbol(Quantity::Height),
+        more,
+    }
+}
+
+fn ceiling(units: Units, ceilings: Option<Ceilings>) -> Cell {
+    let absolute = ceilings.and_then(|c| c.absolute_m);
+    Cell {
+        name: "Ceiling at 0.5 m/s climb",
+        figure: figure(units, Quantity::Height, ceilings.and_then(|c| c.service_m)),
+        unit: units.symbol(Quantity::Height),
+        more: format!("no climb left at {}", with_unit(units, Quantity::Height, absolute)),
+    }
 }
 
 fn at(units: Units, mark: Option<Mark>) -> String {

@@ -6,7 +6,7 @@ mod limits;
 
 use std::rc::Rc;
 
-use spokeshave::result::{Envelope, PointResult};
+use spokeshave::result::{Ceilings, Envelope, PointResult, TakeOff};
 use yew::prelude::*;
 
 use super::chips::air_words;
@@ -29,6 +29,12 @@ pub struct FitPanelProps {
     pub points: Vec<Rc<Option<PointResult>>>,
     /// Limit of propeller rpm.
     pub limit_rpm: Option<f64>,
+    /// Take-off.
+    #[prop_or_default]
+    pub take_off: Option<TakeOff>,
+    /// Ceilings; they follow last.
+    #[prop_or_default]
+    pub ceilings: Option<Ceilings>,
 }
 
 /// Whether the panel shows the same of two states.
@@ -73,7 +79,7 @@ pub fn FitPanel(props: &FitPanelProps) -> Html {
     html! {
         <div class="fit">
             <p class="note">{ format!("The speed range{air}, the air of the flight point selected. Solid: full throttle. Dashed: level flight.") }</p>
-            <Figures envelope={envelope.clone()} units={state.units} />
+            <Figures envelope={envelope.clone()} take_off={props.take_off} ceilings={props.ceilings} units={state.units} />
             <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()} limit_rpm={props.limit_rpm} />
             <Limits envelope={envelope.clone()} limit_rpm={props.limit_rpm} units={state.units} />
             { caution::fit() }
