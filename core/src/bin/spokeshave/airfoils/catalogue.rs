@@ -41,9 +41,9 @@ pub(crate) const CATALOGUE: &[Entry] = &[
         name: "arc-back",
         title: "Flat face with a circular-arc back",
         source: "Drawn from its definition at 12 % with a nose radius of 10 % of the thickness and a sharp trailing edge. Other \
-                 thicknesses by multiplying the ordinates from the flat face; above 12 % the layer leaves the steep tail and no \
-                 tables are given.",
-        thickness: &[0.06, 0.08, 0.10, 0.12],
+                 thicknesses by multiplying the ordinates from the flat face; above 18 % the layer leaves the steep tail over most \
+                 angles and no tables are given.",
+        thickness: &[0.06, 0.08, 0.10, 0.12, 0.15, 0.18],
         draw: || arc_back(0.12, 0.10),
     },
     Entry {
