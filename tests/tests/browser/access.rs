@@ -25,6 +25,23 @@ async fn no_accessibility_rule_is_broken_at_any_size_light_or_dark() -> Result<(
     .await
 }
 
+/// The parts of the page are found by id, and so are the steps' panels.
+#[tokio::test(flavor = "multi_thread")]
+async fn no_two_nodes_have_the_same_id() -> Result<()> {
+    drive("ids", async |browser| {
+        browser.open_page().await?;
+        let twice = browser
+            .run(
+                "const ids = [...document.querySelectorAll('[id]')].map(node => node.id);
+                 return ids.filter((id, i) => ids.indexOf(id) !== i);",
+            )
+            .await?;
+        assert_eq!(twice, serde_json::json!([]));
+        Ok(())
+    })
+    .await
+}
+
 #[tokio::test(flavor = "multi_thread")]
 async fn the_page_does_not_scroll_sideways() -> Result<()> {
     drive("sideways", async |browser| {

@@ -147,7 +147,7 @@ async fn but_for_the_job_a_saved_page_is_the_built_page() -> Result<()> {
     let copy = folder.path().join("with-job.html");
     save_page(&copy).await?;
     let (saved, built) = (std::fs::read_to_string(copy)?, std::fs::read_to_string(built_page()?)?);
-    let node = r#"<script id="job" type="application/json">"#;
+    let node = r#"<script id="page-job" type="application/json">"#;
     let (before, rest) = saved.split_once(node).context("no job node")?;
     let (job, after) = rest.split_once("</script>").context("the job node does not end")?;
     assert_eq!(Job::from_json(job)?.title, HOSTILE_TITLE);

@@ -4,7 +4,7 @@
 // job this very file was saved with: a page that came with another job does not find this one.
 (function (page) {
   "use strict";
-  var node = document.getElementById("job");
+  var node = document.getElementById("page-job");
   var embedded = node ? node.textContent.trim() : "";
   var mark = embedded ? fingerprint(embedded) : "blank";
   var JOB = "spokeshave.1.job." + mark;

@@ -18,7 +18,7 @@
   }
 
   function start() {
-    unpack(document.getElementById("engine").textContent)
+    unpack(document.getElementById("page-engine").textContent)
       .then(function (bytes) { return WebAssembly.compile(bytes); })
       .then(function (module) {
         page.module = module; // a worker gets it by message

@@ -31,13 +31,13 @@ pub mod node {
     /// Where the application is mounted; everything inside is the application's.
     pub const APP: &str = "app";
     /// All style sheets, joined.
-    pub const STYLE: &str = "style";
+    pub const STYLE: &str = "page-style";
     /// The job the page was saved with, as JSON; empty in a freshly built page.
-    pub const JOB: &str = "job";
+    pub const JOB: &str = "page-job";
     /// The WebAssembly module, gzip in base64.
-    pub const ENGINE: &str = "engine";
+    pub const ENGINE: &str = "page-engine";
     /// The JavaScript side of the WebAssembly module.
-    pub const GLUE: &str = "glue";
+    pub const GLUE: &str = "page-glue";
     /// The scripts that start the page.
-    pub const BOOT: &str = "boot";
+    pub const BOOT: &str = "page-boot";
 }
