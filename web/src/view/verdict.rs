@@ -6,14 +6,32 @@ use yew::prelude::*;
 use crate::number::{NO_FIGURE, figure, fixed, fixed_or_none, signed, with_unit};
 use crate::units::{Quantity, Units};
 
-/// One figure of the verdict.
+/// A figure that decides.
 #[derive(Clone, Debug, PartialEq)]
-struct Cell {
-    name: &'static str,
-    figure: String,
-    unit: &'static str,
+pub struct Cell {
+    /// What it is.
+    pub name: &'static str,
+    /// The figure.
+    pub figure: String,
+    /// Its unit; empty where there is none.
+    pub unit: &'static str,
     /// A line under it.
-    more: String,
+    pub more: String,
+}
+
+impl Cell {
+    /// The figure large under its name.
+    pub fn item(self) -> Html {
+        html! {
+            <li>
+                <span class="verdict-name">{ self.name }</span>
+                <span class="verdict-figure"><b>{ self.figure }</b>
+                    if !self.unit.is_empty() { <span class="unit">{ self.unit }</span> }
+                </span>
+                <span class="verdict-more">{ self.more }</span>
+            </li>
+        }
+    }
 }
 
 /// Properties of [`Verdict`].
@@ -37,17 +55,7 @@ pub fn Verdict(props: &VerdictProps) -> Html {
             </section>
         };
     }
-    let cells = cells(props.units, result).into_iter().map(|cell| {
-        html! {
-            <li>
-                <span class="verdict-name">{ cell.name }</span>
-                <span class="verdict-figure"><b>{ cell.figure }</b>
-                    if !cell.unit.is_empty() { <span class="unit">{ cell.unit }</span> }
-                </span>
-                <span class="verdict-more">{ cell.more }</span>
-            </li>
-        }
-    });
+    let cells = cells(props.units, result).into_iter().map(Cell::item);
     html! {
         <section aria-label={format!("Verdict at {}", result.name)}>
             <ul class="verdict">{ for cells }</ul>

@@ -131,8 +131,10 @@ fn power(props: &ChartsProps, envelope: &Envelope) -> Plot {
 }
 
 fn climb(props: &ChartsProps, envelope: &Envelope) -> Plot {
-    let steepest = |v: f64| v > -1e6;
-    let rate = |p: &EnvelopePoint| p.full.as_ref()?.rate_of_climb_m_s.filter(|v| steepest(*v));
+    let any = |p: &EnvelopePoint| p.full.as_ref()?.rate_of_climb_m_s;
+    let best = envelope.points.iter().filter_map(any).fold(0.0, f64::max);
+    // Far below the stall the sums give a steep sink that nobody flies.
+    let rate = |p: &EnvelopePoint| any(p).filter(|v| *v >= -best);
     Plot {
         title: "Rate of climb",
         unit: props.state.units.unit(Quantity::Climb),

@@ -5,6 +5,7 @@ use yew::prelude::*;
 
 use crate::number::{NO_FIGURE, figure, fixed, with_unit};
 use crate::units::{Quantity, Units};
+use crate::view::verdict::Cell;
 
 /// Properties of [`Figures`].
 #[derive(Properties, PartialEq)]
@@ -15,28 +16,10 @@ pub(super) struct FiguresProps {
     pub(super) units: Units,
 }
 
-/// A figure with its name and a line under it.
-struct Cell {
-    name: &'static str,
-    figure: String,
-    unit: &'static str,
-    more: String,
-}
-
 /// The figures in columns.
 #[component]
 pub(super) fn Figures(props: &FiguresProps) -> Html {
-    let cells = cells(props).into_iter().map(|cell| {
-        html! {
-            <li>
-                <span class="verdict-name">{ cell.name }</span>
-                <span class="verdict-figure"><b>{ cell.figure }</b>
-                    if !cell.unit.is_empty() { <span class="unit">{ cell.unit }</span> }
-                </span>
-                <span class="verdict-more">{ cell.more }</span>
-            </li>
-        }
-    });
+    let cells = cells(props).into_iter().map(Cell::item);
     html! { <ul class="verdict fit-figures">{ for cells }</ul> }
 }
 
