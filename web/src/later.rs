@@ -43,6 +43,8 @@ pub enum Piece {
     Ceilings,
     /// Showing the flight points.
     Show,
+    /// Showing the map and the curves as well.
+    ShowMap,
     /// Showing everything worked out so far.
     ShowAll,
 }
@@ -54,10 +56,12 @@ impl Plan {
         let mut pieces: Vec<Piece> = (0..self.count).map(Piece::Point).collect();
         pieces.push(Piece::Show);
         if !self.dragging {
-            pieces.extend([Piece::Map, Piece::Curves]);
+            pieces.extend([Piece::Map, Piece::Curves, Piece::ShowMap]);
             pieces.extend(self.opened.engine.then_some(Piece::Offer));
             pieces.extend(self.opened.fit.then_some(Piece::Envelope));
-            pieces.push(Piece::ShowAll);
+            if self.opened.engine || self.opened.fit {
+                pieces.push(Piece::ShowAll);
+            }
             if self.opened.fit {
                 pieces.extend([Piece::Ceilings, Piece::ShowAll]);
             }
@@ -118,34 +122,32 @@ impl Bench {
             Piece::Offer => drop(results.offer(self.plan.point)),
             Piece::Envelope => drop(results.envelope(self.plan.point)),
             Piece::Ceilings => results.work_ceilings(self.plan.point),
-            Piece::Show | Piece::ShowAll => {
-                let later = self.shown(&mut results, piece == Piece::ShowAll);
+            Piece::Show | Piece::ShowMap | Piece::ShowAll => {
+                let later = self.shown(&mut results, piece);
                 drop(results);
                 self.setter.set(Rc::new(later));
             }
         }
     }
 
-    /// All that has been worked out; what has not stays as it was before.
-    fn shown(&self, results: &mut Results, whole: bool) -> Later {
+    /// What has been worked out so far; what has not stays as it was before.
+    fn shown(&self, results: &mut Results, so_far: Piece) -> Later {
         let point = self.plan.point;
         let points = (0..self.plan.count).map(|i| results.point(i)).collect();
         let rig = results.rig().map(RigRef);
-        let now = Later { rig, point, points, ..Later::clone(&self.before) };
-        if !whole {
+        let mut now = Later { rig, point, points, ..Later::clone(&self.before) };
+        if so_far == Piece::Show {
             return now;
         }
-        let offer = if self.plan.opened.engine { results.offer(point) } else { Rc::default() };
-        let envelope = self.plan.opened.fit.then(|| results.envelope(point));
-        Later {
-            map: results.map(point),
-            curves: results.curves(point),
-            offer,
-            take_off: envelope.as_ref().and_then(|_| results.take_off(point)),
-            ceilings: results.ceilings(point),
-            envelope,
-            ..now
+        (now.map, now.curves) = (results.map(point), results.curves(point));
+        if so_far == Piece::ShowMap {
+            return now;
         }
+        now.offer = if self.plan.opened.engine { results.offer(point) } else { Rc::default() };
+        now.envelope = self.plan.opened.fit.then(|| results.envelope(point));
+        now.take_off = now.envelope.as_ref().and_then(|_| results.take_off(point));
+        now.ceilings = results.ceilings(point);
+        now
     }
 }
 
@@ -159,7 +161,7 @@ mod tests {
         let plan = Plan { count: 2, point: 0, dragging: true, opened: Opened::default() };
         assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Show]);
         let all = Plan { dragging: false, ..plan }.pieces();
-        assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::ShowAll]);
+        assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::ShowMap]);
     }
 
     #[test]

@@ -14,7 +14,7 @@ use std::time::{Duration, Instant};
 use tempfile::TempDir;
 
 /// How long to wait for something to appear.
-const PATIENCE: Duration = Duration::from_secs(10);
+const PATIENCE: Duration = Duration::from_secs(60);
 
 /// A browser under control.
 #[derive(Debug)]
@@ -167,7 +167,7 @@ impl Browser {
     /// Asks again and again until there is an answer.
     ///
     /// # Errors
-    /// If asking fails, or there is no answer in ten seconds; `what` says what was waited for.
+    /// If asking fails, or there is no answer in a minute; `what` says what was waited for.
     pub async fn wait<T>(&self, what: &str, ask: impl AsyncFn() -> Result<Option<T>>) -> Result<T> {
         let begun = Instant::now();
         loop {
