@@ -25,6 +25,19 @@ fn the_fit_is_told_for_people_for_programs_and_as_rows() {
 }
 
 #[test]
+fn the_map_is_told_for_programs() {
+    let o = run(&["map", "--demo", DEMO, "--point", "cruise", "--json", "--speeds", "5", "--radii", "4"], "");
+    assert_eq!(o.status.code(), Some(0), "{}", err(&o));
+    let got: Value = serde_json::from_str(&out(&o)).unwrap();
+    assert_eq!(got["flight_point"], "Cruise");
+    for key in ["departure_deg", "share_of_best", "past_stall_deg"] {
+        let rows = got[key].as_array().unwrap();
+        assert!(rows.len() == 4 && rows.iter().all(|r| r.as_array().unwrap().len() == 5), "{key}");
+    }
+    assert_eq!(got["airspeeds_m_s"].as_array().unwrap().len(), 5);
+}
+
+#[test]
 fn any_number_or_two_of_the_file_may_vary() {
     let o =
         run(&["fit", "--demo", DEMO, "--vary", "propeller.diameter_m=1.45..1.60:4", "--speeds", "12"], "");

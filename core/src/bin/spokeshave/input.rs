@@ -35,6 +35,21 @@ pub(crate) struct JobSource {
     demo: Option<String>,
 }
 
+/// Which flight point gives the air.
+#[derive(clap::Args)]
+pub(crate) struct PointOf {
+    /// The flight point whose air is kept (and, where no engine is asked, its rpm); the first without it
+    #[arg(long)]
+    point: Option<String>,
+}
+
+impl PointOf {
+    /// Its index in the job.
+    pub(crate) fn index(&self, rig: &Rig) -> Result<usize, Stop> {
+        point_index(rig, self.point.as_deref())
+    }
+}
+
 /// How to print.
 #[derive(clap::Args)]
 pub(crate) struct Format {

@@ -1,39 +1,69 @@
 //! `spokeshave map`: departure over speed and radius.
 
-use spokeshave::rotor::DepartureMap;
+use serde::Serialize;
+use spokeshave::rotor::{DepartureMap, MapCell};
 
-use crate::input::{JobSource, Outcome, point_index, print, print_csv};
+use crate::input::{Format, JobSource, Outcome, PointOf, print, print_csv, print_json};
 use crate::table::{csv_figure, signed, table};
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
     #[command(flatten)]
     source: JobSource,
-    /// The flight point whose air is kept; the first without it
-    #[arg(long)]
-    point: Option<String>,
+    #[command(flatten)]
+    point: PointOf,
     /// Number of speeds
     #[arg(long, default_value_t = 12, value_parser = clap::value_parser!(u32).range(2..=1000))]
     speeds: u32,
     /// Number of radii
     #[arg(long, default_value_t = 12, value_parser = clap::value_parser!(u32).range(1..=1000))]
     radii: u32,
-    /// CSV, SI units and degrees, one row a cell
-    #[arg(long)]
-    csv: bool,
+    #[command(flatten)]
+    format: Format,
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
     let rig = args.source.rig()?;
-    let index = point_index(&rig, args.point.as_deref())?;
+    let index = args.point.index(&rig)?;
     let Some(map) = rig.map(index, args.speeds, args.radii) else { return Ok(false) };
-    if args.csv {
+    if args.format.json {
+        print_json(&Told::new(&rig.job.flight_points[index].name, &map))?;
+    } else if args.format.csv {
         let header = ["airspeed_m_s", "rpm", "radius_m", "departure_deg", "share_of_best", "past_stall_deg"];
         print_csv(&header, cells(&map))?;
     } else {
         print(&text(&map))?;
     }
     Ok(true)
+}
+
+/// The map for programs; cells by radius, then by speed.
+#[derive(Serialize)]
+struct Told<'a> {
+    flight_point: &'a str,
+    radii_m: &'a [f64],
+    airspeeds_m_s: &'a [f64],
+    rpm: &'a [f64],
+    departure_deg: Vec<Vec<Option<f64>>>,
+    share_of_best: Vec<Vec<Option<f64>>>,
+    past_stall_deg: Vec<Vec<Option<f64>>>,
+}
+
+impl<'a> Told<'a> {
+    fn new(flight_point: &'a str, map: &'a DepartureMap) -> Self {
+        let every = |of: fn(&MapCell) -> Option<f64>| {
+            map.cells.rows().into_iter().map(|row| row.iter().map(of).collect()).collect()
+        };
+        Self {
+            flight_point,
+            radii_m: &map.radii_m,
+            airspeeds_m_s: &map.airspeeds_m_s,
+            rpm: &map.rpm,
+            departure_deg: every(|c| c.departure_deg),
+            share_of_best: every(|c| c.share_of_best),
+            past_stall_deg: every(|c| c.past_stall_deg),
+        }
+    }
 }
 
 fn cells(map: &DepartureMap) -> impl Iterator<Item = Vec<String>> {

@@ -2,16 +2,15 @@
 
 use spokeshave::rotor::CurvePoint;
 
-use crate::input::{Format, JobSource, Outcome, point_index, print, print_csv, print_json};
+use crate::input::{Format, JobSource, Outcome, PointOf, print, print_csv, print_json};
 use crate::table::{csv_figure, figure, table};
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
     #[command(flatten)]
     source: JobSource,
-    /// The flight point whose rpm and air are kept; the first without it
-    #[arg(long)]
-    point: Option<String>,
+    #[command(flatten)]
+    point: PointOf,
     /// Steps from rest to where the thrust is gone
     #[arg(long, default_value_t = 20, value_parser = clap::value_parser!(u32).range(1..=2000))]
     steps: u32,
@@ -21,7 +20,7 @@ pub(crate) struct Args {
 
 pub(crate) fn run(args: &Args) -> Outcome {
     let rig = args.source.rig()?;
-    let index = point_index(&rig, args.point.as_deref())?;
+    let index = args.point.index(&rig)?;
     let curve = rig.curves(index, args.steps);
     if args.format.json {
         print_json(&curve)?;
