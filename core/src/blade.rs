@@ -47,6 +47,8 @@ pub struct Blade {
     pub radius_m: f64,
     /// Hub radius, m.
     pub hub_radius_m: f64,
+    /// Speed of the air at the disc over the airspeed, 1 less the blockage.
+    pub axial_share: f64,
     /// Families used, each once.
     pub families: Vec<Arc<Family>>,
     chord: Curve,
@@ -108,7 +110,18 @@ impl Blade {
         let angle = figures(&|i, s| chord_line_angle_rad(p, s, &families[stations[i].1]))?;
         let thickness = figures(&|_, s| s.thickness_ratio)?;
         let hub_radius_m = p.hub_diameter_m / 2.0;
-        Ok(Self { count: p.blades, radius_m, hub_radius_m, families, chord, angle, thickness, stations })
+        let axial_share = 1.0 - p.blockage.unwrap_or(0.0);
+        Ok(Self {
+            count: p.blades,
+            radius_m,
+            hub_radius_m,
+            axial_share,
+            families,
+            chord,
+            angle,
+            thickness,
+            stations,
+        })
     }
 
     /// The blade at a radius, m.

@@ -1,9 +1,9 @@
 //! Where propeller, engine and aircraft meet: from a flight point's setting to a condition of the propeller.
 //!
-//! At full throttle the propeller takes what the shaft gives: the rpm is sought over the engine's range, and where the two
-//! meet more than once the highest rpm counts at which the propeller's demand rises through the offer, for that one is stable.
-//! In level flight thrust equals drag. A constant-speed propeller holds its rpm and turns its blades between its stops
-//! instead; at a stop it is a fixed one.
+//! At full throttle the propeller takes what the shaft gives: the rpm is sought over the engine's range, and where
+//! the two meet more than once the highest rpm counts at which the propeller's demand rises through the offer, for
+//! that one is stable. In level flight thrust equals drag, that of the slipstream included. A constant-speed
+//! propeller holds its rpm and turns its blades between its stops instead; at a stop it is a fixed one.
 
 use crate::air::Air;
 use crate::aircraft::thrust_asked_n;
@@ -14,11 +14,14 @@ use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, Loads};
 use root::Missed;
 use settle::{Demand, Free, Governed, Met, STEPS};
+use slipstream::kept_share;
 use trail::Trail;
 
 mod ceiling;
 mod crossings;
+mod dive;
 mod envelope;
+mod figures;
 mod full;
 mod held;
 mod line;
@@ -28,9 +31,11 @@ mod meeting;
 mod offer;
 mod root;
 mod settle;
+mod slipstream;
 mod take_off;
 mod top_speed;
 mod trail;
+mod worth;
 
 pub use ceiling::ceilings;
 pub use crossings::crossings;
@@ -40,7 +45,8 @@ pub use line::line;
 pub use matched::matched;
 pub use meeting::meeting;
 pub use offer::{Offer, offer};
-pub use take_off::{ROLLING_FRICTION, take_off};
+pub use take_off::take_off;
+pub use worth::pitch_worth;
 
 /// Fastest tip considered where no engine sets a limit, as a Mach number.
 const FASTEST_TIP_MACH: f64 = 1.2;
@@ -114,6 +120,9 @@ impl<'r> Solver<'r> {
         let spare =
             |loads: &Loads, c: &Condition| power_w(loads, c) - shaft.power_w(rpm_of(c), &at.air, throttle);
         let at = match self.demand(at, &spare).governed(trail) {
+            Some(Governed::Held(met)) if rpm_of(&met.condition) > highest_rpm(shaft) * (1.0 + 1e-9) => {
+                return Err(State::OverLimitRpm);
+            }
             Some(Governed::Held(met)) => return Ok(met),
             Some(Governed::AtStop(stop)) => stop,
             None => *at,
@@ -145,7 +154,8 @@ impl<'r> Solver<'r> {
     fn level_by_thrust(&self, at: &Condition, trail: &Trail) -> Result<Met, State> {
         let aircraft = self.rig.job.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
         let asked = thrust_asked_n(aircraft, &at.air, at.airspeed_m_s).ok_or(State::OutOfReach)?;
-        self.demanded(at, &|loads, _| loads.thrust_n - asked, trail)
+        let kept = kept_share(self.rig);
+        self.demanded(at, &|loads, _| loads.thrust_n * kept - asked, trail)
     }
 
     /// Where a demand that rises with rpm (or with the blade angle of a governed propeller) is met.

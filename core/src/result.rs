@@ -1,4 +1,5 @@
-//! Results as plain data. Names and units are those of the JSON output; figures without an answer are `None`, never NaN.
+//! Results as plain data. Names and units are those of the JSON output; figures without an answer are `None`, never
+//! NaN.
 
 use serde::Serialize;
 
@@ -6,7 +7,7 @@ mod fit;
 
 pub use fit::{
     Ceilings, Crossing, Envelope, EnvelopePoint, Fit, FullThrottle, HeldAtLimit, Level, Mark, Marks,
-    TIP_MACHS, TakeOff, TipMach,
+    PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,
 };
 
 /// All that is known of a job's flight points.
@@ -192,8 +193,8 @@ pub struct Figures {
     pub slip: Option<f64>,
 }
 
-/// What engine and aircraft make of a propeller's condition. `None` where the job has no engine or aircraft, or it does not
-/// apply.
+/// What engine and aircraft make of a propeller's condition. `None` where the job has no engine or aircraft, or it
+/// does not apply.
 #[derive(Clone, Debug, Default, PartialEq, Serialize)]
 pub struct Meeting {
     /// Engine or motor rpm.
@@ -204,7 +205,8 @@ pub struct Meeting {
     pub power_share: Option<f64>,
     /// Thrust over all propellers, N.
     pub total_thrust_n: Option<f64>,
-    /// Drag of the aeroplane in level flight at this speed, or the weight of a multirotor, N.
+    /// Thrust that level flight at this speed asks of all propellers, the drag with what the slipstream adds to it,
+    /// or the weight of a multirotor, N.
     pub asked_n: Option<f64>,
     /// Rate of climb `(T − D) V/W` of an aeroplane, lift taken as weight, m/s.
     pub rate_of_climb_m_s: Option<f64>,

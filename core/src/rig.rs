@@ -3,10 +3,11 @@
 use std::f64::consts::PI;
 
 use crate::air::{Air, AirError};
+use crate::aircraft::propellers;
 use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
 use crate::job::{FlightPoint, Job, PitchControl};
-use crate::result::{Analysis, Fit, Note, PointResult, PropellerFigures, SectionPoint};
+use crate::result::{Analysis, Fit, Note, PitchWorth, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
 use crate::{fit, report};
 
@@ -37,7 +38,8 @@ impl Rig {
     /// assert_eq!(analysis.flight_points.len(), job.flight_points.len());
     /// ```
     pub fn new(job: &Job) -> Result<Self, BladeError> {
-        let shaft = job.engine.as_ref().and_then(Shaft::new);
+        let engines = job.aircraft.as_ref().map_or(1.0, propellers);
+        let shaft = job.engine.as_ref().and_then(|engine| Shaft::new(engine, engines));
         Ok(Self { rotor: Rotor::new(Blade::new(job)?, &job.method), shaft, job: job.clone() })
     }
 
@@ -115,8 +117,9 @@ impl Rig {
         Some(departure_map(&self.rotor, &line, &self.map_radii_m(radii)))
     }
 
-    /// The whole fit at a flight point's air: the speed range with `speeds` speeds, take-off, ceilings. `None` when there is no such point,
-    /// no engine, or the engine cannot turn the propeller.
+    /// The whole fit at a flight point's air: the speed range with `speeds` speeds, take-off, ceilings. What a
+    /// variable pitch is worth is left to [`Rig::pitch_worth`]. `None` when there is no such point, no engine, or the
+    /// engine cannot turn the propeller.
     #[must_use]
     pub fn fit(&self, index: usize, speeds: u32) -> Option<Fit> {
         let point = self.job.flight_points.get(index)?;
@@ -128,9 +131,16 @@ impl Rig {
             title: self.job.title.clone(),
             take_off: fit::take_off(self, &envelope),
             ceilings: fit::ceilings(self, point.isa_offset_k),
+            pitch_worth: Vec::new(),
             standing_crossings: fit::crossings(self, &still),
             envelope,
         })
+    }
+
+    /// What a variable pitch is worth at each flight point at which it could gain anything.
+    #[must_use]
+    pub fn pitch_worth(&self) -> Vec<PitchWorth> {
+        self.job.flight_points.iter().filter_map(|p| fit::pitch_worth(self, p)).collect()
     }
 
     /// How far the blades are turned in the hub, rad.

@@ -25,6 +25,19 @@ fn the_fit_is_told_for_people_for_programs_and_as_rows() {
 }
 
 #[test]
+fn the_fit_tells_the_dive_and_what_a_variable_pitch_is_worth() {
+    let people = out(&run(&["fit", "--demo", DEMO], ""));
+    for words in ["dive with closed throttle", "A variable pitch would give", "top speed km/h"] {
+        assert!(people.contains(words), "{words} in\n{people}");
+    }
+    let got: Value =
+        serde_json::from_str(&out(&run(&["fit", "--demo", DEMO, "--json", "--speeds", "12"], ""))).unwrap();
+    assert!(got["marks"]["closed_throttle_dive"]["airspeed_m_s"].as_f64().unwrap() > 50.0);
+    let worth = got["pitch_worth"].as_array().unwrap();
+    assert!(!worth.is_empty() && worth.iter().all(|w| w["gain"].as_f64().unwrap() >= 0.0), "{worth:?}");
+}
+
+#[test]
 fn the_map_is_told_for_programs() {
     let o = run(&["map", "--demo", DEMO, "--point", "cruise", "--json", "--speeds", "5", "--radii", "4"], "");
     assert_eq!(o.status.code(), Some(0), "{}", err(&o));

@@ -136,16 +136,25 @@ fn what_cannot_be_is_told_and_gives_no_figures() {
     assert!(climbs.into_iter().all(|c| c < 0.0));
 }
 
-/// Common practice: an aeroplane of 757 kg and 14.86 m² whose polar gives 63 kt for least drag at sea level has 48 kt for least power and 82 kt for
-/// best range by the 3^(1/4) rule, and needs there about 39 kW at the shaft. The zero-lift drag is not given: 0.035 and a propeller's efficiency of
-/// 0.83 are assumed, so that the power is a check of size only.
+/// Common practice: an aeroplane of 757 kg and 14.86 m² whose polar gives 63 kt for least drag at sea level has 48 kt
+/// for least power and 82 kt for best range by the 3^(1/4) rule, and needs there about 39 kW at the shaft. The
+/// zero-lift drag is not given: 0.035 and a propeller's efficiency of 0.83 are assumed, so that the power is a check
+/// of size only.
 #[test]
 fn validate_speeds_common_practice() {
     const KNOT_M_S: f64 = 1852.0 / 3600.0;
     let (mass_kg, area, least_drag) = (757.0, 14.86, 63.0 * KNOT_M_S);
     let lift = 2.0 * mass_kg * 9.806_65 / (1.225 * area * least_drag * least_drag);
     let drag = Drag { cd0: 0.035, k: Some(0.035 / (lift * lift)), aspect_ratio: None, oswald: None };
-    let a = Aeroplane { mass_kg, wing_area_m2: area, drag, cl_max: None, engines: 1 };
+    let a = Aeroplane {
+        mass_kg,
+        wing_area_m2: area,
+        drag,
+        cl_max: None,
+        engines: 1,
+        rolling_friction: None,
+        slipstream_drag_area_m2: None,
+    };
     let air = Air::standard(0.0, 0.0).unwrap();
     let found = speeds(&a, &air);
     assert!((found.least_power_m_s / KNOT_M_S - 48.0).abs() < 0.5);
@@ -154,8 +163,8 @@ fn validate_speeds_common_practice() {
     assert!((shaft_w - 39e3).abs() < 2e3, "{shaft_w}");
 }
 
-/// Common practice: 1.753 m across, 1.473 m pitch, 2000 rpm, J about 0.68: at 0.75 R an advance angle of about 16°, a blade angle of about 20°, an
-/// angle between them near 4°, slip about 20 %.
+/// Common practice: 1.753 m across, 1.473 m pitch, 2000 rpm, J about 0.68: at 0.75 R an advance angle of about 16°, a
+/// blade angle of about 20°, an angle between them near 4°, slip about 20 %.
 #[test]
 fn validate_angles_common_practice() {
     let mut job = demo(0);

@@ -3,6 +3,7 @@
 use roots::{SimpleConvergency, find_root_brent};
 
 use super::Solver;
+use super::slipstream::kept_share;
 use super::trail::Trail;
 use crate::air::{Air, HIGHEST_M};
 use crate::aircraft::{drag_n, propellers, speeds, weight_n};
@@ -19,8 +20,8 @@ const STEP: f64 = 0.1;
 const SPEEDS: u32 = 14;
 const CONVERGED_M: f64 = 0.5;
 
-/// The ceilings of an aeroplane at a temperature offset, as pressure altitudes between sea level and the end of the atmosphere's table.
-/// `None` for other jobs.
+/// The ceilings of an aeroplane at a temperature offset, as pressure altitudes between sea level and the end of the
+/// atmosphere's table. `None` for other jobs.
 #[must_use]
 pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
@@ -38,17 +39,19 @@ pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     Some(Ceilings { service_m: spare(SERVICE_M_S), absolute_m: spare(0.0) })
 }
 
-/// The best rate of climb at full throttle at a height, held to the limit rpm; `None` where there is no answer at any speed.
+/// The best rate of climb at full throttle at a height, held to the limit rpm; `None` where there is no answer at any
+/// speed.
 fn best_climb_m_s(rig: &Rig, a: &Aeroplane, altitude_m: f64, isa_offset_k: f64) -> Option<f64> {
     let air = Air::standard(altitude_m, isa_offset_k).ok()?;
     let solver = Solver::new(rig);
     let aircraft = Aircraft::Aeroplane(a.clone());
     let slow = speeds(a, &air).least_power_m_s;
+    let kept = kept_share(rig);
     let mut trail = Trail::default();
     let mut climb = |v: f64| {
         let at = Condition { air, airspeed_m_s: v, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
         let full = solver.full(&at, &mut trail).ok()?;
-        let thrust = full.loads.thrust_n * propellers(&aircraft);
+        let thrust = full.loads.thrust_n * propellers(&aircraft) * kept;
         Some((v, (thrust - drag_n(a, &air, v)?) * v / weight_n(&aircraft)))
     };
     let mut before: [Option<(f64, f64)>; 2] = [None, None];

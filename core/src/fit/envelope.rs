@@ -1,20 +1,23 @@
 //! The fit over the whole speed range at one air.
 
+use super::figures::{full_throttle, level};
 use super::full::Full;
+use super::settle::Met;
+use super::slipstream::kept_share;
 use super::trail::Trail;
-use super::{Solver, marks, power_w, rpm_of, top_speed};
-use crate::aircraft::{propellers, speeds, thrust_asked_n, weight_n};
+use super::{Solver, marks, top_speed};
+use crate::aircraft::{propellers, speeds, thrust_asked_n};
 use crate::job::{Aircraft, FlightPoint};
 use crate::result::{Envelope, EnvelopePoint, FullThrottle, Level, State};
 use crate::rig::{Rig, air_of};
-use crate::rotor::{Condition, Loads, departure_map, thrustless_speed_m_s};
+use crate::rotor::{Condition, departure_map, thrustless_speed_m_s};
 
 /// How far the range goes beyond top speed.
 const BEYOND_TOP: f64 = 1.12;
 
-/// The fit at `count` equal steps of speed (at least 3) from rest to somewhat beyond top speed, at the air of a flight point, with departures at the
-/// given radius fractions. Without an aircraft it ends where the thrust at full throttle is gone, without an engine there is none; `None` then,
-/// and where the engine cannot turn the propeller.
+/// The fit at `count` equal steps of speed (at least 3) from rest to somewhat beyond top speed, at the air of a
+/// flight point, with departures at the given radius fractions. Without an aircraft it ends where the thrust at full
+/// throttle is gone, without an engine there is none; `None` then, and where the engine cannot turn the propeller.
 #[must_use]
 pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[f64]) -> Option<Envelope> {
     let air = air_of(point).ok()?;
@@ -25,7 +28,7 @@ pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[
     let count = count.max(3);
     let speeds_m_s = (0..count).map(|i| end * f64::from(i) / f64::from(count - 1));
     let course = Course::new(rig, &at, speeds_m_s.collect(), radius_fractions);
-    let points = course.points();
+    let (points, followed) = course.points();
     let aeroplane = match &rig.job.aircraft {
         Some(Aircraft::Aeroplane(a)) => Some(a),
         _ => None,
@@ -38,7 +41,7 @@ pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[
         speeds: aeroplane.map(|a| speeds(a, &air)),
         radius_fractions: radius_fractions.to_vec(),
         standing: points[0].full.clone(),
-        marks: marks::marks(rig, &at, &points, top),
+        marks: marks::marks(rig, &at, &points, &followed, top),
         points,
     })
 }
@@ -60,6 +63,13 @@ fn end_m_s(rig: &Rig, at: &Condition, top: Option<&Full>) -> Option<f64> {
     Some(thrustless_speed_m_s(&rig.rotor, &static_rpm))
 }
 
+/// The answers of a line of speeds, from which those between them can be led.
+#[derive(Default)]
+pub(super) struct Followed {
+    pub(super) full: Vec<Met>,
+    pub(super) level: Vec<Met>,
+}
+
 /// A line of speeds at one air.
 struct Course<'r> {
     solver: Solver<'r>,
@@ -74,14 +84,17 @@ impl<'r> Course<'r> {
         Self { solver: Solver::new(rig), at: *at, speeds_m_s, radii_m }
     }
 
-    fn points(&self) -> Vec<EnvelopePoint> {
-        let (full, level) = (self.full(), self.level());
+    fn points(&self) -> (Vec<EnvelopePoint>, Followed) {
+        let mut followed = Followed::default();
+        let (full, level) = (self.full(&mut followed.full), self.level(&mut followed.level));
         let asked = |v: f64| {
             let aircraft = self.solver.rig.job.aircraft.as_ref()?;
-            Some(thrust_asked_n(aircraft, &self.at.air, v)? * propellers(aircraft))
+            let drag = thrust_asked_n(aircraft, &self.at.air, v)? * propellers(aircraft);
+            Some(drag / kept_share(self.solver.rig))
         };
         let both = full.into_iter().zip(level);
-        both.zip(&self.speeds_m_s)
+        let points = both
+            .zip(&self.speeds_m_s)
             .map(|(((full, full_state), (level, level_state)), &v)| EnvelopePoint {
                 airspeed_m_s: v,
                 asked_n: asked(v),
@@ -90,7 +103,8 @@ impl<'r> Course<'r> {
                 level,
                 level_state,
             })
-            .collect()
+            .collect();
+        (points, followed)
     }
 
     fn stall_m_s(&self) -> f64 {
@@ -101,7 +115,7 @@ impl<'r> Course<'r> {
         Condition { airspeed_m_s, ..self.at }
     }
 
-    fn full(&self) -> Vec<(Option<FullThrottle>, State)> {
+    fn full(&self, followed: &mut Vec<Met>) -> Vec<(Option<FullThrottle>, State)> {
         let mut trail = Trail::default();
         let mut held = false;
         let found: Vec<Result<Full, State>> = self
@@ -116,6 +130,7 @@ impl<'r> Course<'r> {
                     self.solver.full(&at, &mut trail)
                 };
                 held |= full.as_ref().is_ok_and(|f| f.held);
+                followed.extend(trail.last().filter(|met| full.is_ok() && met.condition.airspeed_m_s == v));
                 full
             })
             .collect();
@@ -131,7 +146,7 @@ impl<'r> Course<'r> {
         .collect()
     }
 
-    fn level(&self) -> Vec<(Option<Level>, State)> {
+    fn level(&self, followed: &mut Vec<Met>) -> Vec<(Option<Level>, State)> {
         let mut trail = Trail::default();
         let found: Vec<Result<_, State>> = self
             .speeds_m_s
@@ -139,6 +154,7 @@ impl<'r> Course<'r> {
             .map(|&v| {
                 let met = self.solver.level_by_thrust(&self.here(v), &trail)?;
                 trail.push(&met);
+                followed.push(met);
                 let state = if v < self.stall_m_s() {
                     State::BelowStall
                 } else {
@@ -169,67 +185,5 @@ impl<'r> Course<'r> {
             cells.map_or_else(Vec::new, |c| c.iter().map(|cell| cell.departure_deg).collect())
         };
         conditions.iter().map(|c| next(c.is_some())).collect()
-    }
-}
-
-/// `T V/P` where all are positive.
-fn efficiency(at: &Condition, loads: &Loads) -> Option<f64> {
-    let power = power_w(loads, at);
-    let useful = loads.thrust_n > 0.0 && at.airspeed_m_s > 0.0 && power > 0.0;
-    useful.then(|| loads.thrust_n * at.airspeed_m_s / power)
-}
-
-fn tip_mach(rig: &Rig, at: &Condition) -> f64 {
-    at.airspeed_m_s.hypot(at.rotation_rad_s * rig.rotor.blade.radius_m) / at.air.sound_speed_m_s
-}
-
-/// What full throttle comes to, in figures.
-pub(super) fn full_throttle(rig: &Rig, full: &Full, departure_deg: Vec<Option<f64>>) -> FullThrottle {
-    let (at, loads) = (&full.condition, &full.loads);
-    let aircraft = rig.job.aircraft.as_ref();
-    let thrust_n = loads.thrust_n * aircraft.map_or(1.0, propellers);
-    let climb = aircraft.filter(|a| matches!(a, Aircraft::Aeroplane(_))).and_then(|a| {
-        let drag = thrust_asked_n(a, &at.air, at.airspeed_m_s)? * propellers(a);
-        Some((thrust_n - drag) / weight_n(a))
-    });
-    FullThrottle {
-        rpm: rpm_of(at),
-        held_at_limit: full.held,
-        turn_deg: at.turn_rad.to_degrees(),
-        thrust_n,
-        power_w: power_w(loads, at),
-        efficiency: efficiency(at, loads),
-        tip_mach: tip_mach(rig, at),
-        rate_of_climb_m_s: climb.map(|sine| sine * at.airspeed_m_s),
-        climb_angle_deg: climb.filter(|sine| sine.abs() <= 1.0).map(|sine| sine.asin().to_degrees()),
-        departure_deg,
-    }
-}
-
-/// What level flight comes to, in figures. Fuel, charge and share of power only where the engine gives it.
-pub(super) fn level(
-    rig: &Rig,
-    at: &Condition,
-    loads: &Loads,
-    state: State,
-    departure_deg: Vec<Option<f64>>,
-) -> Level {
-    let (rpm, power) = (rpm_of(at), power_w(loads, at));
-    let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
-    let shaft = rig.shaft.as_ref().filter(|_| state == State::Ok);
-    let endurance_s = shaft.and_then(|s| s.endurance_s(rpm, power, engines));
-    let given = shaft.and_then(|s| s.available_w(rpm, &at.air));
-    Level {
-        rpm,
-        turn_deg: at.turn_rad.to_degrees(),
-        power_w: power,
-        power_share: given.map(|given| power / given),
-        efficiency: efficiency(at, loads),
-        tip_mach: tip_mach(rig, at),
-        fuel_kg_per_h: shaft.and_then(|s| s.fuel_kg_s(power)).map(|f| 3600.0 * f * engines),
-        battery_current_a: shaft.and_then(|s| s.electrics(rpm, power)).map(|e| e.battery_current_a),
-        endurance_s,
-        range_m: endurance_s.map(|t| t * at.airspeed_m_s),
-        departure_deg,
     }
 }

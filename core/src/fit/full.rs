@@ -5,7 +5,7 @@ use super::trail::Trail;
 use super::{Solver, highest_rpm, power_w};
 use crate::job::PitchControl;
 use crate::result::State;
-use crate::rig::rotation_rad_s;
+use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, Loads};
 
 /// What full throttle comes to.
@@ -23,8 +23,22 @@ impl From<Met> for Full {
     }
 }
 
+/// A condition at an rpm that the propeller has run up to. By then a governor has turned the blades to its coarse
+/// stop; one that holds more than that rpm leaves them at the fine one.
+pub(super) fn run_up(rig: &Rig, at: &Condition, rpm: f64) -> Condition {
+    let turn_rad = match rig.job.propeller.pitch_control {
+        PitchControl::ConstantSpeed { rpm: governed, turn_min_deg, .. } if governed > rpm => {
+            turn_min_deg.to_radians()
+        }
+        PitchControl::ConstantSpeed { turn_max_deg, .. } => turn_max_deg.to_radians(),
+        PitchControl::Fixed {} | PitchControl::GroundAdjustable { .. } => at.turn_rad,
+    };
+    Condition { rotation_rad_s: rotation_rad_s(rpm), turn_rad, ..*at }
+}
+
 impl Solver<'_> {
-    /// Full throttle or, where it would pass the limit rpm or the end of the engine's curve, that rpm; leads the trail on.
+    /// Full throttle or, where it would pass the limit rpm or the end of the engine's curve, that rpm; leads the
+    /// trail on.
     pub(super) fn full(&self, at: &Condition, trail: &mut Trail) -> Result<Full, State> {
         match self.throttle(at, 1.0, trail) {
             Ok(met) => {
@@ -39,11 +53,7 @@ impl Solver<'_> {
     /// The limit rpm, throttled back; `None` where the air alone drives the propeller there, which no throttle holds.
     pub(super) fn held_at_limit(&self, at: &Condition) -> Option<Full> {
         let shaft = self.rig.shaft.as_ref()?;
-        let turn_rad = match self.rig.job.propeller.pitch_control {
-            PitchControl::ConstantSpeed { turn_max_deg, .. } => turn_max_deg.to_radians(),
-            PitchControl::Fixed {} | PitchControl::GroundAdjustable { .. } => at.turn_rad,
-        };
-        let condition = Condition { rotation_rad_s: rotation_rad_s(highest_rpm(shaft)), turn_rad, ..*at };
+        let condition = run_up(self.rig, at, highest_rpm(shaft));
         let loads = self.loads(&condition);
         (power_w(&loads, &condition) > 0.0).then_some(Full { condition, loads, held: true })
     }

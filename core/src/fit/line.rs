@@ -1,5 +1,6 @@
 //! The line of conditions along which the departure map is drawn.
 
+use super::full::run_up;
 use super::trail::Trail;
 use super::{Solver, highest_rpm, rpm_of};
 use crate::curve::Curve;
@@ -11,8 +12,8 @@ use crate::rotor::{Condition, thrustless_speed_m_s};
 const NODES: u32 = 8;
 
 /// Conditions at equal steps of speed from rest, at the air of `at`: at full throttle as far as the engine can be
-/// matched and, where its limit rpm is what ends that, on at that rpm (throttled back); without an engine at the rpm of
-/// `at`. Up to where the thrust is gone at the rpm of `at`.
+/// matched and, where its limit rpm is what ends that, on at that rpm (throttled back); without an engine at the rpm
+/// of `at`. Up to where the thrust is gone at the rpm of `at`.
 #[must_use]
 pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     let count = speeds.max(2);
@@ -45,7 +46,7 @@ fn full_throttle(rig: &Rig, at: &Condition, speeds: impl Iterator<Item = f64>) -
     speeds
         .map_while(|v| {
             let here = Condition { airspeed_m_s: v, ..*at };
-            let at_limit = Condition { rotation_rad_s: rotation_rad_s(highest), ..here };
+            let at_limit = run_up(rig, &here, highest);
             if held {
                 return Some(at_limit);
             }

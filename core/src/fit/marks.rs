@@ -1,24 +1,34 @@
-//! Places of the speed range that decide: the tops of curves by the parabola through three points, and where limits are passed.
+//! Places of the speed range that decide: the tops of curves by the parabola through three points, and where limits
+//! are passed.
 
-use super::Solver;
-use super::envelope::{full_throttle, level, stall_m_s};
+use super::dive::dive;
+use super::envelope::{Followed, stall_m_s};
+use super::figures::{full_throttle, level};
 use super::full::Full;
 use super::trail::Trail;
+use super::{Solver, rpm_of};
+use crate::aircraft::propellers;
 use crate::result::{EnvelopePoint, FullThrottle, Level, Mark, Marks, State, TIP_MACHS, TipMach};
 use crate::rig::Rig;
 use crate::rotor::Condition;
 
-/// The marks of an envelope's points; `top` is its top speed.
-pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Option<Full>) -> Marks {
+/// The marks of an envelope's points, found on from the answers at their speeds; `top` is its top speed.
+pub(super) fn marks(
+    rig: &Rig,
+    at: &Condition,
+    points: &[EnvelopePoint],
+    followed: &Followed,
+    top: Option<Full>,
+) -> Marks {
     let solver = Solver::new(rig);
     let stall = stall_m_s(rig, at);
     let here = |airspeed_m_s: f64| Condition { airspeed_m_s, ..*at };
     let full = |v: f64| {
-        let full = solver.full(&here(v), &mut Trail::default()).ok()?;
+        let full = solver.full(&here(v), &mut Trail::beside(&followed.full, v)).ok()?;
         Some(full_throttle(rig, &full, Vec::new()))
     };
     let flight = |v: f64| {
-        let met = solver.level(&here(v), &Trail::default()).ok()?;
+        let met = solver.level(&here(v), &Trail::beside(&followed.level, v)).ok()?;
         Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
     };
     let climb = |of: fn(&FullThrottle) -> Option<f64>| {
@@ -39,6 +49,12 @@ pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Op
             let airspeed_m_s = f.condition.airspeed_m_s;
             Mark { airspeed_m_s, rpm: told.rpm, value: told.thrust_n, held_at_limit: f.held }
         }),
+        closed_throttle_dive: dive(rig, at).map(|f| Mark {
+            airspeed_m_s: f.condition.airspeed_m_s,
+            rpm: rpm_of(&f.condition),
+            value: f.loads.thrust_n * rig.job.aircraft.as_ref().map_or(1.0, propellers),
+            held_at_limit: false,
+        }),
         best_range: cruise(|l| l.range_m),
         best_endurance: cruise(|l| l.endurance_s),
         limit_rpm_from_m_s: passed(points, |f| if f.held_at_limit { 1.0 } else { -1.0 }),
@@ -52,8 +68,8 @@ pub(super) fn marks(rig: &Rig, at: &Condition, points: &[EnvelopePoint], top: Op
     }
 }
 
-/// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or the highest point where it is at
-/// an end. Only speeds above rest and from the stall on count.
+/// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or the
+/// highest point where it is at an end. Only speeds above rest and from the stall on count.
 fn summit(points: &[EnvelopePoint], stall: f64, of: impl Fn(&EnvelopePoint) -> Option<f64>) -> Option<f64> {
     let values: Vec<(f64, f64)> = points
         .iter()

@@ -3,7 +3,7 @@
 use ndarray::Array2;
 
 use super::Solver;
-use super::envelope::full_throttle;
+use super::figures::full_throttle;
 use super::trail::Trail;
 use crate::air::{Air, AirError};
 use crate::result::FullThrottle;

@@ -1,8 +1,8 @@
 //! Roots of a demand that rises with one free quantity.
 //!
-//! A look over equal steps with the rotor's few elements finds where the root lies; secant steps with all its elements refine it. Where the two
-//! do not agree (a root at the end of the range, or one that hardly touches zero) the look is repeated with all elements and the root
-//! bracketed.
+//! A look over equal steps with the rotor's few elements finds where the root lies; secant steps with all its
+//! elements refine it. Where the two do not agree (a root at the end of the range, or one that hardly touches zero)
+//! the look is repeated with all elements and the root bracketed.
 
 use std::ops::RangeInclusive;
 
@@ -11,12 +11,12 @@ const CONVERGED: f64 = 1e-9;
 /// Of a rough root, as a share of its range.
 const ROUGHLY: f64 = 1e-4;
 /// Last step of the secant, as a share of the range; what it leaves is a hundred times less or better.
-const LAST_STEP: f64 = 3e-5;
+pub(super) const LAST_STEP: f64 = 3e-5;
 const MOST_STEPS: u32 = 8;
 /// How far the secant may go from where it starts, as a share of the range.
 const FARTHEST: f64 = 0.1;
 /// A rough look that comes this near to zero, as a share of its largest value, does not rule a root out.
-const DOUBTFUL: f64 = 0.05;
+pub(super) const DOUBTFUL: f64 = 0.05;
 
 /// Why a search found nothing: the demand is met only beyond this end.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -56,7 +56,8 @@ pub(super) struct Search<'f> {
 type Bracket = ((f64, f64), (f64, f64));
 
 impl Search<'_> {
-    /// The wanted root at which the demand rises from below to above zero, and how far it lies above that by few elements.
+    /// The wanted root at which the demand rises from below to above zero, and how far it lies above that by few
+    /// elements.
     pub(super) fn root(&self) -> Result<(Root, Option<f64>), Missed> {
         let bracketed = || self.exact_root().map(|root| (root, None));
         match self.look(self.rough) {
@@ -80,18 +81,24 @@ impl Search<'_> {
         met.unwrap_or_else(|| Root { x: bracketed((a, b), self.rough, ROUGHLY * self.width()), ..line })
     }
 
-    /// Secant steps with all elements from a root known nearly; `None` when they leave the range or the demand does not rise.
+    /// Secant steps with all elements from a root known nearly; `None` when they leave the range or the demand does
+    /// not rise.
     pub(super) fn refined(&self, near: Root) -> Option<Root> {
-        self.secant(near, LAST_STEP, self.exact)
+        self.secant(near, LAST_STEP, false, self.exact)
+    }
+
+    /// The same from a root whose slope is known too, so that a first step that is small enough is the last.
+    pub(super) fn refined_at_once(&self, near: Root) -> Option<Root> {
+        self.secant(near, LAST_STEP, true, self.exact)
     }
 
     /// Secant steps with few elements.
     pub(super) fn rough_refined(&self, near: Root) -> Option<Root> {
-        self.secant(near, ROUGHLY, self.rough)
+        self.secant(near, ROUGHLY, false, self.rough)
     }
 
     /// Secant steps from a place with a slope that the first two looks replace by the measured one.
-    fn secant(&self, near: Root, last_step: f64, demand: &dyn Fn(f64) -> f64) -> Option<Root> {
+    fn secant(&self, near: Root, last_step: f64, at_once: bool, demand: &dyn Fn(f64) -> f64) -> Option<Root> {
         let last_step = last_step * self.width();
         let (mut x, mut slope) = (near.x, near.slope);
         let mut value = demand(x);
@@ -101,7 +108,7 @@ impl Search<'_> {
             if !(slope > 0.0 && within) {
                 return None;
             }
-            if step > 0 && (next - x).abs() <= last_step {
+            if (step > 0 || at_once) && (next - x).abs() <= last_step {
                 return Some(Root { x: next, slope });
             }
             let there = demand(next);

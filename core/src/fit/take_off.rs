@@ -1,9 +1,10 @@
 //! Take-off: the ground roll and the distance to 15 m, from the thrust of an envelope.
 //!
-//! Common practice: the aeroplane rolls without lift (full friction, no induced drag), lifts off at 1.2 and passes 15 m at 1.3 of the stall speed;
-//! level hard ground, no wind. The roll is `∫ V dV/a`, `a = (T − q S cd0 − μ W)/m`; from there to 15 m it is by energy: the height and the gain of
-//! speed over the mean of `(T − D)/W`.
+//! Common practice: the aeroplane rolls without lift (full friction, no induced drag), lifts off at 1.2 and passes 15
+//! m at 1.3 of the stall speed; level hard ground, no wind. The roll is `∫ V dV/a`, `a = (T − q S cd0 − μ W)/m`; from
+//! there to 15 m it is by energy: the height and the gain of speed over the mean of `(T − D)/W`.
 
+use super::slipstream::kept_share;
 use crate::air::G0_M_S2;
 use crate::aircraft::{drag_n, weight_n};
 use crate::curve::Curve;
@@ -11,21 +12,24 @@ use crate::job::{Aeroplane, Aircraft};
 use crate::result::{Envelope, TakeOff};
 use crate::rig::Rig;
 
-/// Rolling friction over weight on short grass or firm ground; common practice gives 0.02 (hard runway) to 0.1 (long grass).
-pub const ROLLING_FRICTION: f64 = 0.04;
+/// Rolling friction over weight where the job gives none: short grass or firm ground; common practice gives 0.02
+/// (hard runway) to 0.1 (long grass).
+const ROLLING_FRICTION: f64 = 0.04;
 const LIFT_OFF: f64 = 1.2;
 const SCREEN: f64 = 1.3;
 const SCREEN_M: f64 = 15.0;
 /// Steps of the integral over speed, by the midpoint rule.
 const STEPS: u32 = 200;
 
-/// Take-off at the air of an envelope. `None` without an aeroplane with a greatest lift coefficient, and where thrust does not suffice to get
-/// there.
+/// Take-off at the air of an envelope. `None` without an aeroplane with a greatest lift coefficient, and where thrust
+/// does not suffice to get there.
 #[must_use]
 pub fn take_off(rig: &Rig, envelope: &Envelope) -> Option<TakeOff> {
     let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
     let stall = envelope.speeds?.stall_m_s?;
-    let known = envelope.points.iter().filter_map(|p| Some((p.airspeed_m_s, p.full.as_ref()?.thrust_n)));
+    let kept = kept_share(rig);
+    let known =
+        envelope.points.iter().filter_map(|p| Some((p.airspeed_m_s, kept * p.full.as_ref()?.thrust_n)));
     let (speed, thrust): (Vec<f64>, Vec<f64>) = known.unzip();
     let starts_at_rest = speed.first() == Some(&0.0);
     let reaches = speed.last().is_some_and(|&v| v >= SCREEN * stall);
@@ -38,13 +42,17 @@ pub fn take_off(rig: &Rig, envelope: &Envelope) -> Option<TakeOff> {
     let mean = 0.5 * (slope(lift_off)? + slope(screen)?);
     let gain = SCREEN_M + (screen * screen - lift_off * lift_off) / (2.0 * G0_M_S2);
     (mean > 0.0).then(|| TakeOff {
-        rolling_friction: ROLLING_FRICTION,
+        rolling_friction: friction(a),
         lift_off_m_s: lift_off,
         ground_roll_m,
         ground_roll_s: time_s,
         screen_m_s: screen,
         distance_to_15_m: ground_roll_m + gain / mean,
     })
+}
+
+fn friction(a: &Aeroplane) -> f64 {
+    a.rolling_friction.unwrap_or(ROLLING_FRICTION)
 }
 
 /// Distance and time of the roll; `None` where the aeroplane does not gather speed.
@@ -54,7 +62,7 @@ fn roll(a: &Aeroplane, density_kg_m3: f64, thrust: &Curve, lift_off: f64) -> Opt
     for i in 0..STEPS {
         let v = (f64::from(i) + 0.5) * step;
         let drag = 0.5 * density_kg_m3 * v * v * a.wing_area_m2 * a.drag.cd0;
-        let gain = (thrust.at(v) - drag) / a.mass_kg - ROLLING_FRICTION * G0_M_S2;
+        let gain = (thrust.at(v) - drag) / a.mass_kg - friction(a) * G0_M_S2;
         if gain <= 0.0 {
             return None;
         }

@@ -5,6 +5,7 @@ use std::cell::RefCell;
 use super::Solver;
 use super::full::Full;
 use super::root::{Search, Wanted};
+use super::slipstream::kept_share;
 use super::trail::Trail;
 use crate::aircraft::{speeds, thrust_asked_n};
 use crate::job::Aircraft;
@@ -14,7 +15,8 @@ use crate::rotor::Condition;
 
 /// How far a step goes, as a share of the speed.
 const STEP: f64 = 0.15;
-/// Where an aeroplane's steps begin, as a share of the speed of least power: below it the drag's power rises and the propeller's falls.
+/// Where an aeroplane's steps begin, as a share of the speed of least power: below it the drag's power rises and the
+/// propeller's falls.
 const FIRST: f64 = 0.7;
 /// Where a multirotor's steps begin, m/s.
 const FIRST_CLIMBING_M_S: f64 = 1.0;
@@ -34,9 +36,14 @@ pub(super) fn condition(rig: &Rig, at: &Condition) -> Result<Condition, State> {
 /// The same or, where the engine's limit rpm comes first, the fastest level flight throttled back to it.
 pub(super) fn fastest(rig: &Rig, at: &Condition) -> Result<Full, State> {
     match top(rig, at, false) {
-        Err(State::OverLimitRpm) => top(rig, at, true),
+        Err(State::OverLimitRpm) => held(rig, at),
         answer => answer,
     }
+}
+
+/// The fastest level flight within the engine's limit rpm, throttled back to it where full throttle would pass it.
+pub(super) fn held(rig: &Rig, at: &Condition) -> Result<Full, State> {
+    top(rig, at, true)
 }
 
 fn top(rig: &Rig, at: &Condition, hold: bool) -> Result<Full, State> {
@@ -74,7 +81,7 @@ impl<'r> Chase<'r> {
     /// Thrust above what is asked.
     fn spare_n(&self, met: &Full) -> Option<f64> {
         let asked = thrust_asked_n(self.aircraft, &self.at.air, met.condition.airspeed_m_s)?;
-        Some(met.loads.thrust_n - asked)
+        Some(met.loads.thrust_n * kept_share(self.solver.rig) - asked)
     }
 
     fn first_m_s(&self) -> f64 {
@@ -114,7 +121,8 @@ impl<'r> Chase<'r> {
         spare.map_or(1.0, |spare| -spare)
     }
 
-    /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends first.
+    /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends
+    /// first.
     fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Full> {
         let (trail, rough_trail) = (RefCell::default(), RefCell::default());
         let search = Search {

@@ -1,65 +1,22 @@
 //! Checks of a job's values, each by path.
 
-use std::fmt::Display;
-use std::ops::RangeInclusive;
+use std::f64::consts::PI;
 
 use super::document::{
-    Aircraft, AltitudeLaw, AngleReference, Electric, Engine, FlightPoint, Job, Piston, PitchControl,
-    Propeller, Section, Setting, Station,
+    Aircraft, AngleReference, Engine, FlightPoint, Job, PitchControl, Propeller, Section, Setting, Station,
 };
 use super::error::{Problem, VERSION};
+use super::found::Found;
 use crate::air::{HIGHEST_M, LARGEST_OFFSET_K, LOWEST_M};
 use crate::section::{check_polars, library};
+use engine::{check_electric, check_piston};
+
+mod engine;
 
 const MOST_STATIONS: usize = 200;
 const MOST_FLIGHT_POINTS: usize = 50;
 const MOST_SECTIONS: usize = 40;
 const MOST_TEXT: usize = 200;
-
-/// Collects problems as they are found.
-#[derive(Default)]
-struct Found(Vec<Problem>);
-
-impl Found {
-    fn refuse(&mut self, path: String, found: impl Display, allowed: impl Into<String>) {
-        let (found, allowed) = (found.to_string(), allowed.into());
-        self.0.push(Problem { path, found, allowed, span: None, above_lowest: false });
-    }
-
-    /// The same, where the lowest value itself is not allowed.
-    fn above(&mut self, lowest: f64, highest: f64) {
-        self.within(lowest, highest);
-        self.0.iter_mut().last().into_iter().for_each(|problem| problem.above_lowest = true);
-    }
-
-    /// Says of the latest problem what span of values is allowed.
-    fn within(&mut self, lowest: f64, highest: f64) {
-        if let Some(problem) = self.0.last_mut() {
-            problem.span = Some((lowest, highest));
-        }
-    }
-
-    /// A NaN is in no range, so it is refused.
-    fn range(&mut self, path: String, value: f64, range: RangeInclusive<f64>, unit: &str) {
-        if !range.contains(&value) {
-            let unit = if unit.is_empty() { String::new() } else { format!(" {unit}") };
-            self.refuse(path, value, format!("{} to {}{unit}", range.start(), range.end()));
-            self.within(*range.start(), *range.end());
-        }
-    }
-
-    fn optional(&mut self, path: String, value: Option<f64>, range: RangeInclusive<f64>, unit: &str) {
-        if let Some(value) = value {
-            self.range(path, value, range, unit);
-        }
-    }
-
-    fn count(&mut self, path: &str, found: usize, range: RangeInclusive<usize>) {
-        if !range.contains(&found) {
-            self.refuse(path.into(), found, format!("{} to {}", range.start(), range.end()));
-        }
-    }
-}
 
 /// Every problem of a job.
 pub(super) fn problems(job: &Job) -> Vec<Problem> {
@@ -69,7 +26,7 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
     }
     text(&mut found, "title", &job.title, 0);
     if let Some(aircraft) = &job.aircraft {
-        check_aircraft(&mut found, aircraft);
+        check_aircraft(&mut found, aircraft, job.propeller.diameter_m);
     }
     match &job.engine {
         Some(Engine::Piston(piston)) => check_piston(&mut found, piston),
@@ -96,7 +53,7 @@ fn text(found: &mut Found, path: &str, value: &str, fewest: usize) {
     }
 }
 
-fn check_aircraft(found: &mut Found, aircraft: &Aircraft) {
+fn check_aircraft(found: &mut Found, aircraft: &Aircraft, diameter_m: f64) {
     let at = |name: &str| format!("aircraft.{name}");
     match aircraft {
         Aircraft::Aeroplane(a) => {
@@ -111,53 +68,17 @@ fn check_aircraft(found: &mut Found, aircraft: &Aircraft) {
             }
             found.optional(at("cl_max"), a.cl_max, 0.2..=5.0, "");
             found.range(at("engines"), f64::from(a.engines), 1.0..=12.0, "");
+            found.optional(at("rolling_friction"), a.rolling_friction, 0.0..=0.5, "of the weight");
+            // At half of the discs the slipstream would eat half of the thrust.
+            let discs_m2 = f64::from(a.engines) * PI * (0.5 * diameter_m).powi(2);
+            let most = if discs_m2.is_finite() { 0.5 * discs_m2 } else { f64::MAX };
+            found.optional(at("slipstream_drag_area_m2"), a.slipstream_drag_area_m2, 0.0..=most, "m²");
         }
         Aircraft::Multirotor(m) => {
             found.range(at("mass_kg"), m.mass_kg, 0.01..=10_000.0, "kg");
             found.range(at("rotors"), f64::from(m.rotors), 1.0..=32.0, "");
         }
     }
-}
-
-fn check_piston(found: &mut Found, p: &Piston) {
-    let at = |name: &str| format!("engine.{name}");
-    found.count("engine.full_throttle", p.full_throttle.len(), 2..=200);
-    for (i, point) in p.full_throttle.iter().enumerate() {
-        found.range(at(&format!("full_throttle[{i}].rpm")), point.rpm, 100.0..=60_000.0, "rpm");
-        found.range(at(&format!("full_throttle[{i}].power_w")), point.power_w, 1.0..=5e6, "W");
-        if i > 0 && point.rpm <= p.full_throttle[i - 1].rpm {
-            let before = p.full_throttle[i - 1].rpm;
-            found.refuse(
-                at(&format!("full_throttle[{i}].rpm")),
-                point.rpm,
-                format!("above {before}, the one before"),
-            );
-        }
-    }
-    found.range(at("gear_ratio"), p.gear_ratio, 0.1..=20.0, "");
-    found.optional(at("max_rpm"), p.max_rpm, 100.0..=60_000.0, "rpm");
-    found.optional(at("idle_rpm"), p.idle_rpm, 50.0..=20_000.0, "rpm");
-    found.optional(at("bsfc_kg_per_kwh"), p.bsfc_kg_per_kwh, 0.05..=3.0, "kg per kWh");
-    found.optional(at("fuel_kg"), p.fuel_kg, 0.0..=50_000.0, "kg");
-    if let AltitudeLaw::HeldTo(held) = &p.altitude_law {
-        found.range(at("altitude_law.altitude_m"), held.altitude_m, 0.0..=HIGHEST_M, "m");
-    }
-}
-
-fn check_electric(found: &mut Found, e: &Electric) {
-    let at = |name: &str| format!("engine.{name}");
-    found.range(at("kv_rpm_per_v"), e.kv_rpm_per_v, 1.0..=20_000.0, "rpm per V");
-    found.range(at("resistance_ohm"), e.resistance_ohm, 1e-5..=100.0, "Ω");
-    found.range(at("no_load_current_a"), e.no_load_current_a, 0.0..=1_000.0, "A");
-    found.optional(at("no_load_voltage_v"), e.no_load_voltage_v, 0.1..=2_000.0, "V");
-    found.optional(at("max_current_a"), e.max_current_a, 0.01..=10_000.0, "A");
-    found.range(at("gear_ratio"), e.gear_ratio, 0.1..=50.0, "");
-    found.range(at("controller_resistance_ohm"), e.controller_resistance_ohm, 0.0..=100.0, "Ω");
-    found.range(at("battery.cells"), f64::from(e.battery.cells), 1.0..=500.0, "");
-    found.range(at("battery.open_circuit_v_per_cell"), e.battery.open_circuit_v_per_cell, 0.5..=6.0, "V");
-    found.range(at("battery.resistance_ohm_per_cell"), e.battery.resistance_ohm_per_cell, 0.0..=10.0, "Ω");
-    found.range(at("battery.capacity_ah"), e.battery.capacity_ah, 0.001..=10_000.0, "A h");
-    found.range(at("battery.usable_fraction"), e.battery.usable_fraction, 0.01..=1.0, "");
 }
 
 fn check_sections(found: &mut Found, sections: &[Section]) {
@@ -224,6 +145,7 @@ fn check_propeller(found: &mut Found, p: &Propeller) {
         found.refuse(at("hub_diameter_m"), p.hub_diameter_m, "0 m to nine tenths of the diameter");
         found.within(0.0, 0.9 * p.diameter_m);
     }
+    found.optional(at("blockage"), p.blockage, 0.0..=0.5, "of the airspeed");
     match p.pitch_control {
         PitchControl::Fixed {} => {}
         PitchControl::GroundAdjustable { turn_deg } => {

@@ -1,6 +1,7 @@
 //! The job file as written: one JSON document, SI units, names fixed.
 //!
-//! These are plain data. [`super::Job::from_json`] reads and checks them; [`crate::rig::Rig`] turns them into what is computed.
+//! These are plain data. [`super::Job::from_json`] reads and checks them; [`crate::rig::Rig`] turns them into what is
+//! computed.
 
 use serde::{Deserialize, Serialize};
 
@@ -65,6 +66,13 @@ pub struct Aeroplane {
     /// Number of engines and propellers.
     #[serde(default = "one")]
     pub engines: u32,
+    /// Rolling friction over weight on the take-off ground; 0.04 without it.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub rolling_friction: Option<f64>,
+    /// Drag area (drag coefficient times area) of all parts that lie in the slipstreams, m²; without it the
+    /// slipstream adds no drag.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub slipstream_drag_area_m2: Option<f64>,
 }
 
 /// Drag polar: CD = cd0 + k CL², or k from aspect ratio and Oswald factor, k = 1/(π e AR).
@@ -131,6 +139,9 @@ pub struct Piston {
     /// Brake specific fuel consumption, kg per kWh.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub bsfc_kg_per_kwh: Option<f64>,
+    /// The same by rising load, in place of `bsfc_kg_per_kwh`.
+    #[serde(default, skip_serializing_if = "Vec::is_empty")]
+    pub bsfc_by_load: Vec<LoadPoint>,
     /// Fuel on board, kg.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub fuel_kg: Option<f64>,
@@ -157,6 +168,17 @@ pub struct PowerPoint {
     pub rpm: f64,
     /// Shaft power, W.
     pub power_w: f64,
+}
+
+/// Specific fuel consumption at one load.
+#[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
+#[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
+#[serde(deny_unknown_fields)]
+pub struct LoadPoint {
+    /// Shaft power over that at full throttle at the same rpm and height, 0 to 1.
+    pub load: f64,
+    /// Brake specific fuel consumption, kg per kWh.
+    pub bsfc_kg_per_kwh: f64,
 }
 
 /// How a piston engine's power falls with height.
@@ -257,6 +279,9 @@ pub struct Propeller {
     /// What blade angles are measured to.
     #[serde(default)]
     pub angle_reference: AngleReference,
+    /// By how much the body behind slows the air at the propeller, as a share of the airspeed; without it not at all.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub blockage: Option<f64>,
     /// Stations from hub to tip.
     pub stations: Vec<Station>,
 }
@@ -397,8 +422,8 @@ pub struct Section {
     /// The same angle by rising thickness, in place of `face_angle_deg`, for polars of several thicknesses.
     #[serde(default, skip_serializing_if = "Vec::is_empty")]
     pub face_angles: Vec<FaceAngle>,
-    /// Points of the outline in chords, from one side of the trailing edge round the nose to the other, so that it can
-    /// be drawn; left out when it is not known.
+    /// Points of the outline in chords, from one side of the trailing edge round the nose to the other, so that it
+    /// can be drawn; left out when it is not known.
     #[serde(default, skip_serializing_if = "Vec::is_empty")]
     pub outline: Vec<[f64; 2]>,
     /// Korn factor for drag divergence.

@@ -7,14 +7,15 @@ mod demo;
 mod document;
 mod drag;
 mod error;
+mod found;
 mod own;
 
 pub use check::section_name_known;
 pub use demo::{DEMOS, Demo};
 pub use document::{
     Aeroplane, Aircraft, AltitudeLaw, AngleReference, Battery, Drag, Electric, Engine, FlightPoint, HeldTo,
-    HeldToKind, Interpolation, Job, Method, Multirotor, Piston, PitchControl, PowerPoint, Propeller,
-    Rotation, Section, Setting, Station, Wood,
+    HeldToKind, Interpolation, Job, LoadPoint, Method, Multirotor, Piston, PitchControl, PowerPoint,
+    Propeller, Rotation, Section, Setting, Station, Wood,
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 

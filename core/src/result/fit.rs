@@ -5,8 +5,8 @@ use serde::Serialize;
 use super::{Figures, Meeting, State};
 use crate::aircraft::Speeds;
 
-/// What a flight point's setting would give if the throttle were drawn back to hold the engine at its limit rpm (or at the end of its
-/// curve), where full throttle would pass it.
+/// What a flight point's setting would give if the throttle were drawn back to hold the engine at its limit rpm (or
+/// at the end of its curve), where full throttle would pass it.
 #[derive(Clone, Debug, PartialEq, Serialize)]
 pub struct HeldAtLimit {
     /// True airspeed, m/s; for top speed the fastest level flight so held.
@@ -51,7 +51,8 @@ pub struct Envelope {
 pub struct EnvelopePoint {
     /// True airspeed, m/s.
     pub airspeed_m_s: f64,
-    /// Drag of the aeroplane in level flight, or the weight of a multirotor, N.
+    /// Thrust that level flight asks of all propellers, the drag with what the slipstream adds to it, or the weight
+    /// of a multirotor, N.
     pub asked_n: Option<f64>,
     /// Full throttle; `None` where there is no answer.
     pub full: Option<FullThrottle>,
@@ -59,7 +60,8 @@ pub struct EnvelopePoint {
     pub full_state: State,
     /// Level flight (or hover); `None` where no rpm gives the thrust.
     pub level: Option<Level>,
-    /// Why level flight has no answer; `ok` otherwise. An answer beyond the engine's power or limit stands, marked by this.
+    /// Why level flight has no answer; `ok` otherwise. An answer beyond the engine's power or limit stands, marked by
+    /// this.
     pub level_state: State,
 }
 
@@ -141,9 +143,14 @@ pub struct Marks {
     pub best_range: Option<Mark>,
     /// Longest time aloft, s.
     pub best_endurance: Option<Mark>,
+    /// Dive with closed throttle in which the air alone drives the propeller to the limit rpm, the engine neither
+    /// driving nor braking (an engine that brakes allows more speed); the value is the propellers' thrust, N, below
+    /// zero. What the airframe allows is another limit.
+    pub closed_throttle_dive: Option<Mark>,
     /// Speed from which full throttle would pass the engine's limit rpm or the end of its curve, m/s.
     pub limit_rpm_from_m_s: Option<f64>,
-    /// Speeds at which the tip at full throttle passes the Mach numbers of [`TIP_MACHS`], m/s, each where it is passed.
+    /// Speeds at which the tip at full throttle passes the Mach numbers of [`TIP_MACHS`], m/s, each where it is
+    /// passed.
     pub tip_mach_from: Vec<TipMach>,
 }
 
@@ -156,8 +163,8 @@ pub struct TipMach {
     pub airspeed_m_s: f64,
 }
 
-/// Helical Mach numbers of the tip that an envelope looks for. Common practice: above about 0.85 a propeller loses efficiency and grows loud,
-/// above 0.92 badly so.
+/// Helical Mach numbers of the tip that an envelope looks for. Common practice: above about 0.85 a propeller loses
+/// efficiency and grows loud, above 0.92 badly so.
 pub const TIP_MACHS: [f64; 2] = [0.85, 0.92];
 
 /// Take-off on level hard ground without wind.
@@ -186,6 +193,37 @@ pub struct Ceilings {
     pub absolute_m: Option<f64>,
 }
 
+/// The figure that a better pitch betters.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "kebab-case")]
+pub enum WorthOf {
+    /// Thrust of all propellers, N; more is better.
+    Thrust,
+    /// Top speed, m/s; more is better.
+    TopSpeed,
+    /// Shaft power of one engine in level flight, W; less is better.
+    ShaftPower,
+}
+
+/// What the best turn of the blades is worth at a flight point, over the pitch as it stands.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct PitchWorth {
+    /// The flight point's name.
+    pub flight_point: String,
+    /// The figure that counts there.
+    pub of: WorthOf,
+    /// The figure with the blades as they stand; `None` where there is no answer.
+    pub as_set: Option<f64>,
+    /// The figure at the best turn; `None` where no turn has an answer.
+    pub best: Option<f64>,
+    /// The best turn, degrees from the drawing, to about a twentieth of a degree; positive is coarser.
+    pub turn_deg: Option<f64>,
+    /// Whether the best lies at an end of what was searched, 15° finer to 25° coarser than the blades stand.
+    pub at_end_of_search: bool,
+    /// How much better the best is, as a share of the figure as set.
+    pub gain: Option<f64>,
+}
+
 /// An rpm at which propeller and engine agree.
 #[derive(Clone, Copy, Debug, PartialEq, Serialize)]
 pub struct Crossing {
@@ -211,6 +249,9 @@ pub struct Fit {
     pub take_off: Option<TakeOff>,
     /// Ceilings, at the flight point's temperature offset.
     pub ceilings: Option<Ceilings>,
+    /// What turning the blades would gain at each flight point of the job at which it could gain anything; empty
+    /// where it was not asked for.
+    pub pitch_worth: Vec<PitchWorth>,
     /// Where propeller and engine agree at rest, blades as drawn.
     pub standing_crossings: Vec<Crossing>,
 }

@@ -1,8 +1,11 @@
 //! Blade-element momentum: the propeller at one condition, by elements and at its stations.
 //!
-//! Method: annuli independent of one another (steady axial flow), each in the balance of [`element`]; integration by the midpoint
-//! rule on cosine-spaced elements between hub and tip, which never touches the ends, where the load is nothing by definition.
-//! Choice: Reynolds and Mach number of an element are those of `hypot(V, Ω r)`, fixed during the solve.
+//! Method: annuli independent of one another (steady axial flow), each in the balance of [`element`]; integration by
+//! the midpoint rule on cosine-spaced elements between hub and tip, which never touches the ends, where the load is
+//! nothing by definition. A body behind slows the air at the disc: the blades meet `(1 − h) V` (H. Glauert, *Airplane
+//! Propellers*, 1935, on body interference, as an effective advance ratio; from memory), h being the job's blockage,
+//! the same over the disc. Choice: Reynolds and Mach number of an element are those of `hypot(V, Ω r)`, fixed during
+//! the solve.
 
 pub mod element;
 pub mod loss;
@@ -124,7 +127,8 @@ impl Rotor {
     #[must_use]
     pub fn element(&self, ring: &Ring, at: &Condition) -> (Element<'_>, Situation) {
         let turning = at.rotation_rad_s * ring.cut.radius_m;
-        let speed = at.airspeed_m_s.hypot(turning);
+        let axial = at.airspeed_m_s * self.blade.axial_share;
+        let speed = axial.hypot(turning);
         let situation = Situation {
             thickness_ratio: ring.cut.thickness_ratio,
             reynolds: at.air.density_kg_m3 * speed * ring.cut.chord_m / at.air.viscosity_pa_s,
@@ -135,7 +139,7 @@ impl Rotor {
         let local = |i: usize| Local::new(&self.blade.families[i], situation);
         let outer = (mix.share > 0.0).then(|| (local(mix.outer), mix.share));
         let element = Element {
-            axial_m_s: at.airspeed_m_s,
+            axial_m_s: axial,
             turning_m_s: turning,
             angle_rad: ring.cut.angle_rad + at.turn_rad,
             solidity: ring.solidity,

@@ -1,0 +1,54 @@
+//! A plain sentence for each limit of a fit.
+
+use spokeshave::result::Fit;
+
+/// A plain sentence for each limit.
+pub(super) fn limits(fit: &Fit) -> Vec<String> {
+    let m = &fit.envelope.marks;
+    let mut said = Vec::new();
+    if let Some(stall) = fit.envelope.speeds.and_then(|s| s.stall_m_s) {
+        said.push(format!(
+            "The stall is at {:.0} km/h; level flight and climb count from there on.",
+            3.6 * stall
+        ));
+    }
+    if let Some(v) = m.limit_rpm_from_m_s {
+        said.push(format!(
+            "From {:.0} km/h on full throttle would pass the engine's limit rpm, or the end of its power curve: figures there are throttled back to it.",
+            3.6 * v
+        ));
+    }
+    if m.top_speed.is_some_and(|t| t.held_at_limit) {
+        said.push(
+            "Top speed is held at the limit rpm: the engine could give more than the propeller may take."
+                .into(),
+        );
+    }
+    if m.top_speed.is_none() {
+        said.push("No level flight at full throttle is as fast as the stall.".into());
+    }
+    for t in &m.tip_mach_from {
+        said.push(format!("From {:.0} km/h on the tip passes Mach {:.2}.", 3.6 * t.airspeed_m_s, t.tip_mach));
+    }
+    if let Some(d) = m.closed_throttle_dive {
+        said.push(format!(
+            "In a dive with closed throttle the air alone drives the propeller to the limit rpm, {:.0}, at {:.0} km/h, if the engine then neither drives nor brakes; one that brakes allows somewhat more. The airframe's own limit may come first.",
+            d.rpm,
+            3.6 * d.airspeed_m_s
+        ));
+    }
+    if fit.standing_crossings.len() > 1 {
+        said.push(format!(
+            "At rest engine and propeller agree at {} rpm; the highest stable one counts.",
+            fit.standing_crossings.iter().map(|c| format!("{:.0}", c.rpm)).collect::<Vec<_>>().join(", ")
+        ));
+    }
+    if m.limit_rpm_from_m_s.is_none() && m.tip_mach_from.is_empty() {
+        said.push("Neither the limit rpm nor a tip Mach number of note is passed in this range.".into());
+    }
+    said.push(
+        "Estimates at this mass, without reserve, wind or slope; keep to the handbook and to local rules."
+            .into(),
+    );
+    said
+}

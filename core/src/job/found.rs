@@ -1,0 +1,57 @@
+//! Problems of a job as they are found.
+
+use std::fmt::Display;
+use std::ops::RangeInclusive;
+
+use super::error::Problem;
+
+/// Collects problems as they are found.
+#[derive(Default)]
+pub(super) struct Found(pub(super) Vec<Problem>);
+
+impl Found {
+    pub(super) fn refuse(&mut self, path: String, found: impl Display, allowed: impl Into<String>) {
+        let (found, allowed) = (found.to_string(), allowed.into());
+        self.0.push(Problem { path, found, allowed, span: None, above_lowest: false });
+    }
+
+    /// The same, where the lowest value itself is not allowed.
+    pub(super) fn above(&mut self, lowest: f64, highest: f64) {
+        self.within(lowest, highest);
+        self.0.iter_mut().last().into_iter().for_each(|problem| problem.above_lowest = true);
+    }
+
+    /// Says of the latest problem what span of values is allowed.
+    pub(super) fn within(&mut self, lowest: f64, highest: f64) {
+        if let Some(problem) = self.0.last_mut() {
+            problem.span = Some((lowest, highest));
+        }
+    }
+
+    /// A NaN is in no range, so it is refused.
+    pub(super) fn range(&mut self, path: String, value: f64, range: RangeInclusive<f64>, unit: &str) {
+        if !range.contains(&value) {
+            let unit = if unit.is_empty() { String::new() } else { format!(" {unit}") };
+            self.refuse(path, value, format!("{} to {}{unit}", range.start(), range.end()));
+            self.within(*range.start(), *range.end());
+        }
+    }
+
+    pub(super) fn optional(
+        &mut self,
+        path: String,
+        value: Option<f64>,
+        range: RangeInclusive<f64>,
+        unit: &str,
+    ) {
+        if let Some(value) = value {
+            self.range(path, value, range, unit);
+        }
+    }
+
+    pub(super) fn count(&mut self, path: &str, found: usize, range: RangeInclusive<usize>) {
+        if !range.contains(&found) {
+            self.refuse(path.into(), found, format!("{} to {}", range.start(), range.end()));
+        }
+    }
+}
