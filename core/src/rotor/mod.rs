@@ -67,7 +67,7 @@ pub struct Ring {
     solidity: f64,
     /// Width for the integral, m.
     width_m: f64,
-    /// Snel's factor `3.1 (c/r)²`, faded out towards the tip; 0 when switched off.
+    /// Snel's factor `3.1 (c/r)²`, at most 1, faded out towards the tip; 0 when switched off.
     stall_delay: f64,
 }
 
@@ -113,7 +113,9 @@ impl Rotor {
     pub fn ring(&self, radius_m: f64) -> Ring {
         let (blade, b) = (&self.blade, f64::from(self.blade.count));
         let cut = blade.cut(radius_m);
-        let delay = 3.1 * (cut.chord_m / radius_m).powi(2) * delay_fade(radius_m / blade.radius_m);
+        // Next to a wide root the factor would pass one, and lift the potential flow's: it cannot.
+        let snel = (3.1 * (cut.chord_m / radius_m).powi(2)).min(1.0);
+        let delay = snel * delay_fade(radius_m / blade.radius_m);
         Ring {
             cut,
             ends: Ends::new(b, radius_m, blade.radius_m, blade.hub_radius_m, self.method.hub_loss),
