@@ -89,6 +89,14 @@ impl Blade {
     /// # Errors
     /// Only for a job that [`Job::check`] refuses.
     pub fn new(job: &Job) -> Result<Self, BladeError> {
+        Self::with(job, &[])
+    }
+
+    /// The blade of a job whose sections are the same as those of a job already made ready, whose families are taken over.
+    ///
+    /// # Errors
+    /// Only for a job that [`Job::check`] refuses.
+    pub fn with(job: &Job, known: &[Arc<Family>]) -> Result<Self, BladeError> {
         let p = &job.propeller;
         let radius_m = p.diameter_m / 2.0;
         let mut families: Vec<Arc<Family>> = Vec::new();
@@ -97,7 +105,8 @@ impl Blade {
             let index = if let Some(known) = families.iter().position(|f| f.about.name == s.section) {
                 known
             } else {
-                families.push(family(job, i, &s.section)?);
+                let ready = known.iter().find(|f| f.about.name == s.section).cloned();
+                families.push(ready.map_or_else(|| family(job, i, &s.section), Ok)?);
                 families.len() - 1
             };
             stations.push((s.radius_fraction * radius_m, index));

@@ -18,3 +18,4 @@ pub mod result;
 pub mod rig;
 pub mod rotor;
 pub mod section;
+pub mod shape;

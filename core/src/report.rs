@@ -135,7 +135,9 @@ pub fn section_curve(rotor: &Rotor, ring: &Ring, at: &Condition) -> Vec<SectionP
         .collect()
 }
 
-fn best_of(element: &Element) -> Option<Best> {
+/// The best angle of an element's section where it works; `None` where it nowhere lifts.
+#[must_use]
+pub fn best_of(element: &Element) -> Option<Best> {
     best(|a| element.section.at(a), element.section.stall_rad())
 }
 

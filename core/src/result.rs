@@ -4,11 +4,13 @@
 use serde::Serialize;
 
 mod fit;
+mod shape;
 
 pub use fit::{
     Ceilings, Crossing, Envelope, EnvelopePoint, Fit, FullThrottle, HeldAtLimit, Level, Mark, Marks,
     PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,
 };
+pub use shape::{Bound, Brief, Compared, LeastLoss, LossStation, Origin, Twist, TwistStation};
 
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]

@@ -6,7 +6,7 @@ use crate::air::{Air, AirError};
 use crate::aircraft::propellers;
 use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
-use crate::job::{FlightPoint, Job, PitchControl};
+use crate::job::{FlightPoint, Job, PitchControl, Propeller};
 use crate::result::{Analysis, Fit, Note, PitchWorth, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
 use crate::{fit, report};
@@ -41,6 +41,16 @@ impl Rig {
         let engines = job.aircraft.as_ref().map_or(1.0, propellers);
         let shaft = job.engine.as_ref().and_then(|engine| Shaft::new(engine, engines));
         Ok(Self { rotor: Rotor::new(Blade::new(job)?, &job.method), shaft, job: job.clone() })
+    }
+
+    /// The same job with another propeller of the same sections.
+    ///
+    /// # Errors
+    /// Only for a propeller that [`Job::check`] refuses.
+    pub fn with_propeller(&self, propeller: Propeller) -> Result<Self, BladeError> {
+        let job = Job { propeller, ..self.job.clone() };
+        let blade = Blade::with(&job, &self.rotor.blade.families)?;
+        Ok(Self { rotor: Rotor::new(blade, &job.method), shaft: self.shaft.clone(), job })
     }
 
     /// Every flight point worked out.

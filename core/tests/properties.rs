@@ -8,6 +8,7 @@ use serde_json::Value;
 use spokeshave::job::{AngleReference, DEMOS, Job, Setting};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::Condition;
+use spokeshave::shape::{Lift, LossTask, least_loss, twist};
 
 /// Every null of an answered flight point that is not one of those that may be.
 fn unexpected_nulls(point: &Value) -> Vec<String> {
@@ -35,6 +36,25 @@ fn unexpected_nulls(point: &Value) -> Vec<String> {
 
 proptest! {
     #![proptest_config(ProptestConfig::with_cases(80))]
+
+    #[test]
+    fn any_valid_job_is_shaped_or_refused_in_words(job in jobs(), cl in prop::option::of(0.1..1.5f64), weight in 0.0..2.0f64) {
+        let rig = Rig::new(&job).unwrap();
+        match twist(&rig, &[1.0, weight]) {
+            Ok(shaped) => {
+                prop_assert_eq!(shaped.job.check(), vec![]);
+                prop_assert!(shaped.result.stations.iter().all(|s| s.angle_deg.is_finite()));
+            }
+            Err(e) => prop_assert!(!e.to_string().contains("NaN"), "{}", e),
+        }
+        match least_loss(&rig, &LossTask { lift: cl.map_or(Lift::default(), Lift::Coefficient), ..LossTask::default() }) {
+            Ok(shaped) => {
+                prop_assert_eq!(shaped.job.check(), vec![]);
+                prop_assert!(shaped.result.thrust_n.is_finite() && shaped.result.efficiency.is_finite());
+            }
+            Err(e) => prop_assert!(!e.to_string().contains("NaN"), "{}", e),
+        }
+    }
 
     #[test]
     fn any_valid_job_is_answered_without_panic_or_a_figure_that_is_not_finite(job in jobs()) {

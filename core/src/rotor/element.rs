@@ -156,9 +156,33 @@ impl Element<'_> {
         Some(self.balanced(phi, lookups.get() + 1))
     }
 
+    /// The balance with the angle of attack (rad) kept, whatever blade angle that asks for: one root in (0, π/2), for the coefficients do not
+    /// change with the inflow. `None` at the ends of the blade and where so much lift cannot be carried.
+    #[must_use]
+    pub fn balance_at(&self, alpha_rad: f64) -> Option<Balance> {
+        if self.ends.bare() {
+            return None;
+        }
+        let section = self.section.at(alpha_rad);
+        let speed = self.axial_m_s.hypot(self.turning_m_s);
+        let residual = |phi: f64| {
+            let t = self.terms_with(phi, section);
+            (self.turning_m_s * t.n - self.axial_m_s * t.m) / speed
+        };
+        if !(residual(NEAR_ZERO_RAD) < 0.0 && residual(FRAC_PI_2) > 0.0) {
+            return None;
+        }
+        let mut rule = SimpleConvergency { eps: CONVERGED, max_iter: MOST_PASSES };
+        let phi = find_root_brent(NEAR_ZERO_RAD, FRAC_PI_2, residual, &mut rule).ok()?;
+        Some(Self { angle_rad: phi + alpha_rad, ..*self }.balanced(phi, 1))
+    }
+
     fn terms(&self, phi: f64) -> Terms {
+        self.terms_with(phi, self.section.at(self.angle_rad - phi))
+    }
+
+    fn terms_with(&self, phi: f64, section: Coefficients) -> Terms {
         let (sin, cos) = phi.sin_cos();
-        let section = self.section.at(self.angle_rad - phi);
         let loss = self.ends.factor(sin.abs());
         let sigma_cn = self.solidity * (section.cl * cos - section.cd * sin);
         let sigma_ct = self.solidity * (section.cl * sin + section.cd * cos);

@@ -10,6 +10,7 @@ mod input;
 mod map;
 mod polar;
 mod sections;
+mod shape;
 mod sweep;
 mod table;
 mod vary;
@@ -31,6 +32,8 @@ const EXAMPLES: &str = "Examples:
   spokeshave analyse JOB.json --json               the same for programs, SI units
   spokeshave fit JOB.json                          climb, range, top speed, limits over the whole speed range
   spokeshave fit JOB.json --vary propeller.diameter_m=1.4..1.7:31    the same over any number of the file, CSV
+  spokeshave shape JOB.json twist --point Cruise   angles that put every station at its best lift-to-drag
+  spokeshave shape JOB.json least-loss --point Cruise --job > NEW.json    least induced loss, as a job of its own
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
@@ -48,6 +51,8 @@ enum Command {
     Analyse(analyse::Args),
     /// Where propeller, engine and aircraft meet over the whole speed range
     Fit(fit::Args),
+    /// A better blade for the job, as a variant beside the drawn one
+    Shape(shape::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),
     /// Departure over speed and radius at a flight point's air
@@ -70,6 +75,7 @@ fn main() -> ExitCode {
     let outcome = match Cli::parse().command {
         Command::Analyse(args) => analyse::run(&args),
         Command::Fit(args) => fit::run(&args),
+        Command::Shape(args) => shape::run(&args),
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),

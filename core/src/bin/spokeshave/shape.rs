@@ -1,0 +1,114 @@
+//! `spokeshave shape`: a better blade for the job, as a variant beside the drawn one.
+
+mod least_loss;
+mod twist;
+
+use clap::Subcommand;
+use serde::Serialize;
+use spokeshave::job::Job;
+use spokeshave::result::{Brief, Compared};
+use spokeshave::shape::{ShapeError, Shaped};
+
+use crate::input::{JobSource, Outcome, print, print_json};
+use crate::table::{figure, table};
+
+/// Strength is not judged by any of these commands; see to it by a proven practice or a calculation before such a blade is run.
+#[derive(clap::Args)]
+pub(crate) struct Args {
+    #[command(flatten)]
+    source: JobSource,
+    #[command(subcommand)]
+    how: How,
+}
+
+#[derive(Subcommand)]
+enum How {
+    /// Angles that put every station at its best lift-to-drag, chords as drawn
+    Twist(twist::Args),
+    /// Chord and angle of least induced loss at one flight point
+    LeastLoss(least_loss::Args),
+}
+
+/// How to print.
+#[derive(clap::Args)]
+struct Print {
+    /// One JSON document, SI units
+    #[arg(long)]
+    json: bool,
+    /// The whole shaped job, as a job file; the file that was read stays as it is
+    #[arg(long, conflicts_with = "json")]
+    job: bool,
+}
+
+pub(crate) fn run(args: &Args) -> Outcome {
+    let rig = args.source.rig()?;
+    match &args.how {
+        How::Twist(how) => twist::run(&rig, how),
+        How::LeastLoss(how) => least_loss::run(&rig, how),
+    }
+}
+
+const CAUTION: &str = "Strength is not judged here. Check the blade's strength before it is run.";
+
+/// Prints a shaped blade, or why there is none.
+fn told<T: Serialize>(
+    shaped: Result<Shaped<T>, ShapeError>,
+    how: &Print,
+    suffix: &str,
+    text: impl Fn(&T) -> String,
+) -> Outcome {
+    let shaped = match shaped {
+        Ok(shaped) => shaped,
+        Err(e) => return Ok(no_answer(&e)),
+    };
+    if how.job {
+        print(&variant(shaped.job, suffix).to_json())?;
+    } else if how.json {
+        print_json(&shaped.result)?;
+    } else {
+        print(&format!("{}\n\n{CAUTION}", text(&shaped.result)))?;
+    }
+    Ok(true)
+}
+
+/// On standard error, so that what is piped on stays a document.
+fn no_answer(e: &ShapeError) -> bool {
+    eprintln!("spokeshave: no answer: {e}");
+    false
+}
+
+/// The shaped job by a title of its own.
+fn variant(mut job: Job, suffix: &str) -> Job {
+    let title = format!("{} ({suffix})", job.title);
+    if title.chars().count() <= 200 {
+        job.title = title;
+    }
+    job
+}
+
+/// Flight points with the drawn and with the shaped blade.
+fn compared(points: &[Compared]) -> String {
+    let header =
+        ["flight point", "blade", "km/h", "rpm", "thrust N", "power kW", "efficiency", "climb m/s", ""];
+    let rows = points.iter().flat_map(|c| [row(&c.drawn, "drawn"), row(&c.shaped, "shaped")]);
+    table(&header, rows.collect())
+}
+
+fn row(b: &Brief, blade: &str) -> Vec<String> {
+    let words = match (b.held_at_limit, b.rpm) {
+        (true, _) => "throttled back to the limit rpm",
+        (false, None) => b.state.sentence(),
+        (false, Some(_)) => "",
+    };
+    vec![
+        b.name.clone(),
+        blade.into(),
+        figure(b.airspeed_m_s.map(|v| 3.6 * v), 1),
+        figure(b.rpm, 0),
+        figure(b.thrust_n, 1),
+        figure(b.power_w.map(|p| p / 1e3), 3),
+        figure(b.efficiency, 4),
+        figure(b.rate_of_climb_m_s, 2),
+        words.into(),
+    ]
+}

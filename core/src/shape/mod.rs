@@ -1,0 +1,27 @@
+//! From a job to a better blade: a variant beside the drawn one, never over it.
+//!
+//! Angles alone at best incidence ([`twist`]); chord and angle of least induced loss ([`least_loss`]). Strength is not judged here: a blade that comes out
+//! thinner or narrower than a proven one needs its own check of strength.
+
+pub mod adkins_liebeck;
+mod brief;
+mod error;
+mod least_loss;
+mod twist;
+mod variant;
+
+pub use brief::{brief, briefs};
+pub use error::ShapeError;
+pub use least_loss::{Lift, LossTask, least_loss};
+pub use twist::twist;
+
+use crate::job::Job;
+
+/// A shaped blade: the whole job with it, and what is known of it.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Shaped<T> {
+    /// The job with the shaped propeller.
+    pub job: Job,
+    /// What is known of it.
+    pub result: T,
+}
