@@ -7,7 +7,7 @@ use gloo_events::EventListener;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::fit::Offer;
 use spokeshave::job::Job;
-use spokeshave::result::{Ceilings, Envelope, PointResult, TakeOff};
+use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 use wasm_bindgen::JsCast;
@@ -99,6 +99,8 @@ pub struct Later {
     pub take_off: Option<TakeOff>,
     /// Ceilings, which follow last.
     pub ceilings: Option<Ceilings>,
+    /// What a variable pitch is worth; follows with the ceilings.
+    pub worth: Rc<Vec<PitchWorth>>,
 }
 
 impl Later {

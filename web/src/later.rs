@@ -41,6 +41,8 @@ pub enum Piece {
     Envelope,
     /// The ceilings.
     Ceilings,
+    /// What a variable pitch is worth.
+    Worth,
     /// Showing the flight points.
     Show,
     /// Showing the map and the curves as well.
@@ -63,7 +65,7 @@ impl Plan {
                 pieces.push(Piece::ShowAll);
             }
             if self.opened.fit {
-                pieces.extend([Piece::Ceilings, Piece::ShowAll]);
+                pieces.extend([Piece::Ceilings, Piece::ShowAll, Piece::Worth, Piece::ShowAll]);
             }
         }
         pieces
@@ -122,6 +124,7 @@ impl Bench {
             Piece::Offer => drop(results.offer(self.plan.point)),
             Piece::Envelope => drop(results.envelope(self.plan.point)),
             Piece::Ceilings => results.work_ceilings(self.plan.point),
+            Piece::Worth => results.work_worth(),
             Piece::Show | Piece::ShowMap | Piece::ShowAll => {
                 let later = self.shown(&mut results, piece);
                 drop(results);
@@ -146,7 +149,7 @@ impl Bench {
         now.offer = if self.plan.opened.engine { results.offer(point) } else { Rc::default() };
         now.envelope = self.plan.opened.fit.then(|| results.envelope(point));
         now.take_off = now.envelope.as_ref().and_then(|_| results.take_off(point));
-        now.ceilings = results.ceilings(point);
+        (now.ceilings, now.worth) = (results.ceilings(point), results.worth());
         now
     }
 }

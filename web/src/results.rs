@@ -6,7 +6,7 @@ use std::rc::Rc;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::{self, Offer};
 use spokeshave::job::{FlightPoint, Job};
-use spokeshave::result::{Ceilings, Envelope, PointResult, SectionPoint, TakeOff};
+use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, SectionPoint, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 
@@ -63,6 +63,8 @@ pub struct Results {
     envelopes: Shelf<[f64; 2], Option<Envelope>>,
     /// By temperature offset.
     ceilings: Shelf<f64, Option<Ceilings>>,
+    /// By all flight points.
+    worth: Shelf<Vec<FlightPoint>, Vec<PitchWorth>>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
 }
 
@@ -134,6 +136,19 @@ impl Results {
     pub fn take_off(&mut self, i: usize) -> Option<TakeOff> {
         let envelope = self.envelope(i);
         fit::take_off(self.rig.as_ref()?, envelope.as_ref().as_ref()?)
+    }
+
+    /// Works out what a variable pitch is worth at every flight point.
+    pub fn work_worth(&mut self) {
+        if let Some(rig) = self.rig.clone() {
+            self.worth.get(&rig.job.flight_points, || rig.pitch_worth());
+        }
+    }
+
+    /// What a variable pitch is worth, once it has been worked out.
+    #[must_use]
+    pub fn worth(&self) -> Rc<Vec<PitchWorth>> {
+        self.rig.as_ref().and_then(|rig| self.worth.known(&rig.job.flight_points)).unwrap_or_default()
     }
 
     /// Works out the ceilings at a flight point's temperature offset.

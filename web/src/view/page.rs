@@ -112,7 +112,7 @@ fn Panels(props: &PageProps) -> Html {
             <Panel id="fit" number={5} title="Fit" open={*open} onunfold={act.on(|open| Action::Unfold(Part::Fit, open))}
                 result={fit::in_a_line(state, later.envelope.as_ref().and_then(|e| e.as_ref().as_ref()))}>
                 <FitPanel state={state.part(fit::same_fit)} envelope={later.envelope.clone()} points={later.points.clone()} limit_rpm={limit_rpm(later)}
-                    take_off={later.take_off} ceilings={later.ceilings} />
+                    take_off={later.take_off} ceilings={later.ceilings} worth={later.worth.clone()} />
             </Panel>
             <Panel id="coefficients" number={6} title="Coefficients" open={*open}
                 result={coefficients::in_a_line((*now.point).as_ref())}>

@@ -26,6 +26,7 @@ fn sentences(props: &LimitsProps) -> Vec<String> {
     let speed = |v| with_unit(units, Quantity::Speed, Some(v));
     let mut said = vec![rpm(props)];
     said.extend(stall(props));
+    said.extend(dive(props));
     for tip in &envelope.marks.tip_mach_from {
         let mach = fixed(tip.tip_mach, 2);
         said.push(if tip.airspeed_m_s > 0.0 {
@@ -64,6 +65,16 @@ fn rpm(props: &LimitsProps) -> String {
         }
         None => format!("Full throttle keeps the engine below {limit} over the whole speed range shown."),
     }
+}
+
+fn dive(props: &LimitsProps) -> Option<String> {
+    let dive = props.envelope.marks.closed_throttle_dive?;
+    Some(format!(
+        "In a dive with the throttle closed the air alone turns the propeller to {} at {}, if the engine then neither drives nor \
+         brakes. The airframe's own limit may come first.",
+        with_unit(props.units, Quantity::Rpm, Some(dive.rpm)),
+        with_unit(props.units, Quantity::Speed, Some(dive.airspeed_m_s))
+    ))
 }
 
 fn stall(props: &LimitsProps) -> Option<String> {

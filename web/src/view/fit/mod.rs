@@ -3,10 +3,11 @@
 mod charts;
 mod figures;
 mod limits;
+mod worth;
 
 use std::rc::Rc;
 
-use spokeshave::result::{Ceilings, Envelope, PointResult, TakeOff};
+use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use yew::prelude::*;
 
 use super::chips::air_words;
@@ -17,6 +18,7 @@ use crate::units::Quantity;
 use charts::Charts;
 use figures::Figures;
 use limits::Limits;
+use worth::Worth;
 
 /// Properties of [`FitPanel`].
 #[derive(Properties, PartialEq)]
@@ -35,6 +37,9 @@ pub struct FitPanelProps {
     /// Ceilings; they follow last.
     #[prop_or_default]
     pub ceilings: Option<Ceilings>,
+    /// What a variable pitch is worth; follows last.
+    #[prop_or_default]
+    pub worth: Rc<Vec<PitchWorth>>,
 }
 
 /// Whether the panel shows the same of two states.
@@ -82,6 +87,7 @@ pub fn FitPanel(props: &FitPanelProps) -> Html {
             <Figures envelope={envelope.clone()} take_off={props.take_off} ceilings={props.ceilings} units={state.units} />
             <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()} limit_rpm={props.limit_rpm} />
             <Limits envelope={envelope.clone()} limit_rpm={props.limit_rpm} units={state.units} />
+            <Worth worth={props.worth.clone()} units={state.units} />
             { caution::fit() }
         </div>
     }
