@@ -3,9 +3,11 @@
 
 use serde::Serialize;
 
+mod chart;
 mod fit;
 mod shape;
 
+pub use chart::{ChartCell, Cost, ErrorCosts, Figure, Limit, Margin, PitchDiameter, Tolerance};
 pub use fit::{
     Ceilings, Crossing, Envelope, EnvelopePoint, Fit, FullThrottle, HeldAtLimit, Level, Mark, Marks,
     PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,

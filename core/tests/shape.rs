@@ -1,10 +1,12 @@
 //! Shaped blades keep their promises when they are analysed anew.
 
 use spokeshave::job::{AngleReference, DEMOS, Job, PitchControl, Setting};
-use spokeshave::result::{Brief, Origin, State};
+use spokeshave::result::{Brief, Figure, Limit, Origin, State, Tolerance};
 use spokeshave::rig::Rig;
 use spokeshave::shape::adkins_liebeck::Wanted;
-use spokeshave::shape::{Lift, LossTask, ShapeError, brief, least_loss, twist};
+use spokeshave::shape::{
+    Lift, Limits, LossTask, PitchBy, ShapeError, brief, error_costs, least_loss, pitch_diameter, twist,
+};
 
 fn demo(index: usize) -> Rig {
     Rig::new(&Job::from_json(DEMOS[index].json).unwrap()).unwrap()
@@ -163,5 +165,53 @@ fn no_small_change_of_a_least_loss_blade_gains_anything_worth_having() {
                 assert!(gain < 5e-4, "{what} of station {i} times {factor}: {gain}");
             }
         }
+    }
+}
+
+/// Slopes are central differences; a blade that is off by twice as much, matched by itself, must lie on them.
+#[test]
+fn what_an_error_costs_agrees_with_blades_analysed_by_themselves() {
+    let rig = demo(0);
+    let tolerance = Tolerance { angle_deg: 0.25, chord_mm: 0.5, thickness_mm: 0.3 };
+    let costs = error_costs(&rig, tolerance).unwrap();
+    let cruise =
+        |figure| costs.costs.iter().find(|c| c.flight_point == "Cruise" && c.figure == figure).unwrap();
+    for (figure, tight) in [(Figure::Rpm, 0.05), (Figure::PowerW, 0.2)] {
+        let cost = cruise(figure);
+        let (mut more, mut less) = (rig.job.clone(), rig.job.clone());
+        let turn = |job: &mut Job, by: f64| {
+            let station = &mut job.propeller.stations[7];
+            station.angle_deg = station.angle_deg.map(|a| a + by);
+        };
+        turn(&mut more, 0.2);
+        turn(&mut less, -0.2);
+        let of = |job: &Job| figure.of(&brief(&Rig::new(job).unwrap(), &job.flight_points[2])).unwrap();
+        let direct = (of(&more) - of(&less)) / 0.4;
+        let told = cost.per_degree[7].unwrap();
+        let scale = cost.per_degree.iter().flatten().fold(0.0f64, |m, s| m.max(s.abs()));
+        assert!((told - direct).abs() < tight * scale, "{figure:?}: {told} {direct}");
+        assert!(cost.band_worst >= cost.band_independent && cost.band_independent > 0.0);
+    }
+    assert!(error_costs(&rig, Tolerance { angle_deg: f64::NAN, ..tolerance }).is_err());
+}
+
+#[test]
+fn the_chart_holds_the_drawn_propeller_and_its_limits() {
+    let rig = demo(0);
+    let (pitch, diameter) = (rig.rotor.blade.pitch_075_m(0.0), rig.job.propeller.diameter_m);
+    let limits =
+        Limits { diameter_most_m: Some(1.55), standing_rpm_least: Some(2900.0), ..Limits::default() };
+    let (pitches, diameters) =
+        ([0.9 * pitch, pitch, 1.1 * pitch], [0.95 * diameter, diameter, 1.1 * diameter]);
+    for by in [PitchBy::Scale, PitchBy::Turn] {
+        let chart = pitch_diameter(&rig, 2, &pitches, &diameters, by, &limits).unwrap();
+        let here = chart.cells[[1, 1]].as_ref().unwrap();
+        let drawn = brief(&rig, &rig.job.flight_points[2]);
+        let (a, b) = (here.figures.rpm.unwrap(), drawn.rpm.unwrap());
+        assert!((a / b - 1.0).abs() < 1e-6, "{a} {b}");
+        assert_eq!(here.broken, vec![]);
+        assert!(chart.cells[[1, 2]].as_ref().unwrap().broken.contains(&Limit::DiameterMost));
+        let rpm = |p: usize| chart.cells[[p, 1]].as_ref().unwrap().standing_rpm.unwrap();
+        assert!(rpm(0) > rpm(1) && rpm(1) > rpm(2), "a coarser propeller stands slower");
     }
 }

@@ -1,18 +1,25 @@
 //! From a job to a better blade: a variant beside the drawn one, never over it.
 //!
-//! Angles alone at best incidence ([`twist`]); chord and angle of least induced loss ([`least_loss`]). Strength is not judged here: a blade that comes out
+//! Angles alone at best incidence ([`twist`]); chord and angle of least induced loss ([`least_loss`]); what an error costs ([`error_costs`]); figures over pitch and diameter
+//! ([`pitch_diameter`]). Strength is not judged here: a blade that comes out
 //! thinner or narrower than a proven one needs its own check of strength.
 
 pub mod adkins_liebeck;
 mod brief;
+mod chart;
+mod cost;
 mod error;
 mod least_loss;
+mod limits;
 mod twist;
 mod variant;
 
 pub use brief::{brief, briefs};
+pub use chart::{MOST_CHART_STEPS, PitchBy, pitch_diameter, sized};
+pub use cost::error_costs;
 pub use error::ShapeError;
 pub use least_loss::{Lift, LossTask, least_loss};
+pub use limits::Limits;
 pub use twist::twist;
 
 use crate::job::Job;

@@ -21,6 +21,13 @@ pub(super) fn with_angles(rig: &Rig, angles_rad: &[f64]) -> Propeller {
     propeller
 }
 
+/// The same, each angle by the number of its station and the drawn angle.
+pub(super) fn with_angles_of(rig: &Rig, of: impl Fn(usize, f64) -> f64) -> Propeller {
+    let blade = &rig.rotor.blade;
+    let angles = blade.station_radii_m().enumerate().map(|(i, r)| of(i, blade.cut(r).angle_rad));
+    with_angles(rig, &angles.collect::<Vec<_>>())
+}
+
 pub(super) fn rounded(value: f64, parts: f64) -> f64 {
     (value * parts).round() / parts
 }

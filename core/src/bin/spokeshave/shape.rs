@@ -1,5 +1,6 @@
 //! `spokeshave shape`: a better blade for the job, as a variant beside the drawn one.
 
+mod error;
 mod least_loss;
 mod twist;
 
@@ -27,6 +28,8 @@ enum How {
     Twist(twist::Args),
     /// Chord and angle of least induced loss at one flight point
     LeastLoss(least_loss::Args),
+    /// What an error of angle, chord or thickness costs, station by station
+    Error(error::Args),
 }
 
 /// How to print.
@@ -45,6 +48,7 @@ pub(crate) fn run(args: &Args) -> Outcome {
     match &args.how {
         How::Twist(how) => twist::run(&rig, how),
         How::LeastLoss(how) => least_loss::run(&rig, how),
+        How::Error(how) => error::run(&rig, how),
     }
 }
 

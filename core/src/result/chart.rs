@@ -1,0 +1,173 @@
+//! Results of what an error costs and of the chart over pitch and diameter, as plain data.
+
+use ndarray::Array2;
+use serde::{Serialize, Serializer};
+
+use super::Brief;
+
+/// A figure that an error of the blade changes.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "snake_case")]
+pub enum Figure {
+    /// True airspeed, m/s; of top speed.
+    AirspeedMS,
+    /// Propeller rpm.
+    Rpm,
+    /// Thrust of one propeller, N.
+    ThrustN,
+    /// Shaft power of one propeller, W.
+    PowerW,
+    /// `T V/P`.
+    Efficiency,
+    /// Rate of climb, m/s.
+    RateOfClimbMS,
+}
+
+impl Figure {
+    /// All of them.
+    pub const ALL: [Self; 6] =
+        [Self::AirspeedMS, Self::Rpm, Self::ThrustN, Self::PowerW, Self::Efficiency, Self::RateOfClimbMS];
+
+    /// Its value at a flight point.
+    #[must_use]
+    pub fn of(self, b: &Brief) -> Option<f64> {
+        match self {
+            Self::AirspeedMS => b.airspeed_m_s,
+            Self::Rpm => b.rpm,
+            Self::ThrustN => b.thrust_n,
+            Self::PowerW => b.power_w,
+            Self::Efficiency => b.efficiency,
+            Self::RateOfClimbMS => b.rate_of_climb_m_s,
+        }
+    }
+}
+
+/// Errors of carving: each station may be off by as much either way, on its own.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct Tolerance {
+    /// Blade angle, degrees.
+    pub angle_deg: f64,
+    /// Chord, mm.
+    pub chord_mm: f64,
+    /// Thickness, mm.
+    pub thickness_mm: f64,
+}
+
+/// One figure with what errors make of it.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Cost {
+    /// The flight point.
+    pub flight_point: String,
+    /// The figure.
+    pub figure: Figure,
+    /// Its value with the blade as drawn.
+    pub drawn: f64,
+    /// Change per degree of blade angle, station by station; `None` where the changed blade has no answer.
+    pub per_degree: Vec<Option<f64>>,
+    /// Change per millimetre of chord, station by station.
+    pub per_mm_chord: Vec<Option<f64>>,
+    /// Change per millimetre of thickness, station by station.
+    pub per_mm_thickness: Vec<Option<f64>>,
+    /// Linear: the most the figure changes either way if every station is off to the worse side.
+    pub band_worst: f64,
+    /// Linear: root of the sum of squares over all stations, for errors that are independent of one another.
+    pub band_independent: f64,
+}
+
+/// What errors of the blade cost.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct ErrorCosts {
+    /// Radius of each station, m.
+    pub radii_m: Vec<f64>,
+    /// The tolerance of the bands.
+    pub tolerance: Tolerance,
+    /// Figures by flight point.
+    pub costs: Vec<Cost>,
+}
+
+/// A limit of the finished propeller.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "kebab-case")]
+pub enum Limit {
+    /// A flight point has no answer.
+    Answer,
+    /// Greatest propeller rpm.
+    RpmMost,
+    /// Least rpm standing at full throttle.
+    StandingRpmLeast,
+    /// Greatest helical Mach number of the tip.
+    TipMachMost,
+    /// Greatest diameter, by ground clearance.
+    DiameterMost,
+    /// Greatest width of the blank.
+    BlankWidthMost,
+    /// Greatest depth of the blank.
+    BlankDepthMost,
+}
+
+/// How far a limit is kept.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Margin {
+    /// The limit.
+    pub limit: Limit,
+    /// The flight point, where it is one of a flight point.
+    pub flight_point: Option<String>,
+    /// What is found, in the limit's own unit; `None` where there is no answer.
+    pub found: Option<f64>,
+    /// What is allowed.
+    pub allowed: f64,
+    /// Share of the limit left over; below zero it is broken.
+    pub share: f64,
+}
+
+impl Margin {
+    /// One plain sentence.
+    #[must_use]
+    pub fn sentence(&self) -> String {
+        let what = match self.limit {
+            Limit::Answer => "there is no answer",
+            Limit::RpmMost => "rpm is above its limit",
+            Limit::StandingRpmLeast => "the rpm standing at full throttle is below its limit",
+            Limit::TipMachMost => "the Mach number of the tip is above its limit",
+            Limit::DiameterMost => "the diameter is above what the ground leaves",
+            Limit::BlankWidthMost => "the blade is wider than the blank (m)",
+            Limit::BlankDepthMost => "the blade is deeper than the blank (m)",
+        };
+        let place = self.flight_point.as_ref().map_or_else(String::new, |p| format!("{p}: "));
+        match self.found {
+            Some(found) => format!("{place}{what}: {found:.4}, allowed {:.4}", self.allowed),
+            None => format!("{place}{what}"),
+        }
+    }
+}
+
+/// One propeller of the chart.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct ChartCell {
+    /// Its figures.
+    pub figures: Brief,
+    /// Rpm standing at full throttle, where a limit asks for it.
+    pub standing_rpm: Option<f64>,
+    /// The limits it breaks.
+    pub broken: Vec<Limit>,
+}
+
+/// Figures over pitch and diameter.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct PitchDiameter {
+    /// The flight point.
+    pub flight_point: String,
+    /// Geometric pitches at 0.75 R, m.
+    pub pitches_m: Vec<f64>,
+    /// Diameters, m.
+    pub diameters_m: Vec<f64>,
+    /// Pitch and diameter as drawn, m.
+    pub drawn_m: (f64, f64),
+    /// `[pitch, diameter]`; `None` where no such blade may be.
+    #[serde(serialize_with = "rows")]
+    pub cells: Array2<Option<ChartCell>>,
+}
+
+fn rows<T: Serialize, S: Serializer>(cells: &Array2<T>, to: S) -> Result<S::Ok, S::Error> {
+    to.collect_seq(cells.outer_iter().map(|row| row.into_iter().collect::<Vec<&T>>()))
+}
