@@ -120,7 +120,7 @@ impl Note {
             Self::MachNotReliable => "Mach number above 0.85, not to be relied on",
             Self::Windmilling => "driven by the air",
             Self::NoBalance => "no balance found, no load counted",
-            Self::NoLoadAtEnd => "at the end of the blade, no load",
+            Self::NoLoadAtEnd => "at the end of the blade or inside the hub, no load",
             Self::HeldAtLimitRpm => "throttled back to hold the limit rpm",
         }
     }

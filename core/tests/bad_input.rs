@@ -130,6 +130,8 @@ fn wrong_tables_are_named_by_row() {
 fn broken_text_is_refused_with_its_line() {
     let text = DEMOS[0].json;
     let cut = Job::from_json(&text[..text.len() / 2]).unwrap_err();
+    let page = Job::from_json("<!doctype html><html>").unwrap_err();
+    assert!(page.to_string().contains("this is a page"), "{page}");
     assert!(matches!(cut, JobError::Syntax { line, .. } if line > 10), "{cut}");
     for wrong in ["", "null", "[]", "NaN", "{\"spokeshave\": 1e999}", "\u{0}"] {
         assert!(Job::from_json(wrong).is_err(), "{wrong:?}");

@@ -37,7 +37,7 @@ impl Job {
             return Err(JobError::TooLarge { found_bytes: text.len() });
         }
         let value: Value =
-            serde_json::from_str(text.trim_start_matches('\u{feff}')).map_err(|e| syntax_error(&e))?;
+            serde_json::from_str(text.trim_start_matches('\u{feff}')).map_err(|e| syntax_error(text, &e))?;
         check_version(&value)?;
         let job: Self = serde_path_to_error::deserialize(value).map_err(|e| shape_error(&e))?;
         match job.check() {
@@ -68,9 +68,12 @@ fn check_version(value: &Value) -> Result<(), JobError> {
     }
 }
 
-fn syntax_error(e: &serde_json::Error) -> JobError {
+fn syntax_error(file: &str, e: &serde_json::Error) -> JobError {
     let text = e.to_string();
     let message = match text.rsplit_once(" at line ") {
+        _ if file.trim_start().starts_with('<') => {
+            "this is a page; a page with a job inside opens in the browser itself"
+        }
         _ if e.is_eof() => "the text ends in the middle; part of the file is missing",
         Some((what, _)) => what,
         None => &text,

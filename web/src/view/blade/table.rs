@@ -75,7 +75,7 @@ pub fn StationTable(props: &StationTableProps) -> Html {
             <RowButtons state={state.clone()} />
             <p class="note">
                 { "Boxed figures are yours to type in; a comma or a point is decimal, a unit may follow. " }
-                if columns.face { { "“On face” is what a protractor reads on the flat back. " } }
+                if columns.face { { "“On face” is what a protractor reads on the flat face. " } }
                 { match job.propeller.angle_reference {
                     AngleReference::ChordLine => "Angles are kept to the chord line, and pitch is reckoned from that. ",
                     AngleReference::FlatFace => "Angles are kept as read on the flat face, and pitch is reckoned from that. ",

@@ -54,7 +54,7 @@ fn cells(props: &FiguresProps) -> Vec<Cell> {
 fn take_off(units: Units, take_off: Option<TakeOff>) -> Cell {
     let height = |m| with_unit(units, Quantity::Height, Some(m));
     let more = take_off.map_or_else(
-        || "not reached, or no stall known".into(),
+        || "the stall is not reached, or not known".into(),
         |t| {
             format!(
                 "to {} high {}; friction {}",
@@ -120,7 +120,11 @@ fn long(
     words: fn(Units, f64) -> (String, &'static str),
 ) -> Cell {
     let (figure, unit) = mark.map_or_else(|| (NO_FIGURE.into(), ""), |m| words(units, m.value));
-    let more = if mark.is_some() { at(units, mark) } else { "needs fuel or charge on board".into() };
+    let more = if mark.is_some() {
+        at(units, mark)
+    } else {
+        "no level flight, or nothing on board to run on".into()
+    };
     Cell { name, figure, unit, more }
 }
 
