@@ -39,12 +39,12 @@ macro_rules! by_kind {
         impl<'de> serde::Deserialize<'de> for $name {
             fn deserialize<D: serde::Deserializer<'de>>(from: D) -> Result<Self, D::Error> {
                 let mut value = <serde_json::Value as serde::Deserialize>::deserialize(from)?;
-                let kind: String = super::by_kind::kind_of(&mut value)?;
+                let kind: String = $crate::job::by_kind::kind_of(&mut value)?;
                 match kind.as_str() {
-                    $($tag => super::by_kind::rest(value).map(Self::$variant),)+
+                    $($tag => $crate::job::by_kind::rest(value).map(Self::$variant),)+
                     other => Err(serde::de::Error::custom(format!(
                         "kind{}\"{other}\" is not known; allowed are {}",
-                        super::by_kind::PATH_MARK,
+                        $crate::job::by_kind::PATH_MARK,
                         [$($tag),+].join(", ")
                     ))),
                 }
