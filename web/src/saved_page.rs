@@ -12,7 +12,17 @@ use spokeshave_boot::{Parts, node};
 pub fn with_job(job: &str) -> Option<String> {
     let document = web_sys::window()?.document()?;
     let text = |id: &str| document.get_element_by_id(id)?.text_content();
-    let (style, engine) = (text(node::STYLE)?, text(node::ENGINE)?);
-    let (glue, boot) = (text(node::GLUE)?, text(node::BOOT)?);
-    Parts { style: &style, job, engine: &engine, glue: &glue, boot: &boot }.page().ok()
+    let (style, boot) = (text(node::STYLE)?, text(node::BOOT)?);
+    let (opener, opener_glue) = (text(node::OPENER)?, text(node::OPENER_GLUE)?);
+    let (engine, glue) = (text(node::ENGINE)?, text(node::GLUE)?);
+    let parts = Parts {
+        style: &style,
+        job,
+        opener: &opener,
+        opener_glue: &opener_glue,
+        engine: &engine,
+        glue: &glue,
+        boot: &boot,
+    };
+    parts.page().ok()
 }

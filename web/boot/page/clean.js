@@ -2,7 +2,7 @@
 // browser or its add-ons put in. Before the application starts, only the parts of the file are left.
 (function (page) {
   "use strict";
-  var PARTS = ["app", "page-job", "page-boot", "page-engine", "page-glue"];
+  var PARTS = ["app", "page-job", "page-boot", "page-opener", "page-opener-glue", "page-engine", "page-glue"];
 
   function dropAttributes(node, kept) {
     Array.prototype.slice.call(node.attributes).forEach(function (attribute) {

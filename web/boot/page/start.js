@@ -9,16 +9,28 @@
     return lacks;
   }
 
-  function unpack(base64) {
-    var text = atob(base64.trim());
+  // The bytes that stand as base64 in a node.
+  function bytesOf(id) {
+    var text = atob(document.getElementById(id).textContent.trim());
     var bytes = new Uint8Array(text.length);
     for (var i = 0; i < text.length; i += 1) { bytes[i] = text.charCodeAt(i); }
+    return bytes;
+  }
+
+  function gunzip(bytes) {
     var stream = new Blob([bytes]).stream().pipeThrough(new DecompressionStream("gzip"));
     return new Response(stream).arrayBuffer();
   }
 
+  // The opener is a small module in the browser's own packing; it opens the large one.
+  function unpack() {
+    return gunzip(bytesOf("page-opener"))
+      .then(function (bytes) { return page_opener({ module_or_path: bytes }); })
+      .then(function () { return page_opener.open(bytesOf("page-engine")); });
+  }
+
   function start() {
-    unpack(document.getElementById("page-engine").textContent)
+    unpack()
       .then(function (bytes) { return WebAssembly.compile(bytes); })
       .then(function (module) {
         page.module = module; // a worker gets it by message

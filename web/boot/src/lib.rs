@@ -34,7 +34,11 @@ pub mod node {
     pub const STYLE: &str = "page-style";
     /// The job the page was saved with, as JSON; empty in a freshly built page.
     pub const JOB: &str = "page-job";
-    /// The WebAssembly module, gzip in base64.
+    /// The small WebAssembly module that unpacks the engine, gzip in base64.
+    pub const OPENER: &str = "page-opener";
+    /// The JavaScript side of the opener.
+    pub const OPENER_GLUE: &str = "page-opener-glue";
+    /// The WebAssembly module, LZMA in base64.
     pub const ENGINE: &str = "page-engine";
     /// The JavaScript side of the WebAssembly module.
     pub const GLUE: &str = "page-glue";

@@ -12,7 +12,11 @@ pub struct Parts<'a> {
     pub style: &'a str,
     /// A job as JSON, or nothing.
     pub job: &'a str,
-    /// The WebAssembly module, gzip in base64.
+    /// The small WebAssembly module that unpacks the engine, gzip in base64.
+    pub opener: &'a str,
+    /// The JavaScript side of the opener.
+    pub opener_glue: &'a str,
+    /// The WebAssembly module, LZMA in base64.
     pub engine: &'a str,
     /// The JavaScript side of the WebAssembly module.
     pub glue: &'a str,
@@ -45,6 +49,8 @@ impl Parts<'_> {
         Ok(fill(TEMPLATE, |slot| match slot {
             "style" => self.style.to_owned(),
             "job" => job_text(self.job),
+            "opener" => self.opener.to_owned(),
+            "opener-glue" => script_text(self.opener_glue),
             "engine" => self.engine.to_owned(),
             "glue" => script_text(self.glue),
             "boot" => script_text(self.boot),
@@ -73,14 +79,22 @@ mod tests {
     use super::*;
 
     fn parts(job: &str) -> Parts<'_> {
-        Parts { style: "p{}", job, engine: "AAAA", glue: "let g;", boot: "start()" }
+        Parts {
+            style: "p{}",
+            job,
+            opener: "BBBB",
+            opener_glue: "let o;",
+            engine: "AAAA",
+            glue: "let g;",
+            boot: "start()",
+        }
     }
 
     #[test]
     fn every_slot_of_the_template_is_filled() {
         let page = parts("").page().unwrap();
         assert!(!page.contains("{{"));
-        for text in ["p{}", "AAAA", "let g;", "start()"] {
+        for text in ["p{}", "BBBB", "let o;", "AAAA", "let g;", "start()"] {
             assert_eq!(page.matches(text).count(), 1, "{text}");
         }
     }

@@ -6,10 +6,29 @@ use crate::{Toolchain, Workspace};
 use anyhow::Result;
 use std::path::{Path, PathBuf};
 
-/// Compiles `web`; gives the path of the raw module.
-pub(crate) fn compile(workspace: &Workspace, toolchain: &Toolchain) -> Result<PathBuf> {
+/// The raw modules, as compiled.
+pub(crate) struct Modules {
+    /// The page.
+    pub(crate) page: PathBuf,
+    /// What unpacks the page's module in the browser.
+    pub(crate) opener: PathBuf,
+}
+
+/// Compiles `web` and `web/opener`.
+pub(crate) fn compile(workspace: &Workspace, toolchain: &Toolchain) -> Result<Modules> {
     let mut cargo = workspace.cargo();
-    cargo.args(["build", "--package", "spokeshave-web", "--lib", "--profile", "page", "--target", TARGET]);
+    cargo.args([
+        "build",
+        "--package",
+        "spokeshave-web",
+        "--package",
+        "spokeshave-opener",
+        "--lib",
+        "--profile",
+        "page",
+        "--target",
+        TARGET,
+    ]);
     cargo.env_remove("RUSTFLAGS").env("CARGO_ENCODED_RUSTFLAGS", hidden_paths(workspace).join("\u{1f}"));
     let target = match toolchain {
         Toolchain::Installed => workspace.target.clone(),
@@ -23,7 +42,9 @@ pub(crate) fn compile(workspace: &Workspace, toolchain: &Toolchain) -> Result<Pa
         }
     };
     run(&mut cargo)?;
-    Ok(target.join(TARGET).join("page").join("spokeshave_web.wasm"))
+    let folder = target.join(TARGET).join("page");
+    let module = |name: &str| folder.join(name).with_extension("wasm");
+    Ok(Modules { page: module("spokeshave_web"), opener: module("spokeshave_opener") })
 }
 
 /// Compiler flags that keep the folders of this machine out of the module. The last that fits is used.

@@ -38,9 +38,9 @@ pub struct Page {
 /// message says what to do.
 pub fn build_page(workspace: &Workspace, source: Source) -> Result<Page> {
     let toolchain = Toolchain::find(workspace, source)?;
-    let module = compile::compile(workspace, &toolchain)?;
+    let modules = compile::compile(workspace, &toolchain)?;
     let style = stylesheet::joined(workspace)?;
-    let packed = pack::pack(&module, &style)?;
+    let packed = pack::pack(&modules, &style)?;
     let folder = workspace.target.join("page");
     let path = folder.join("spokeshave.html");
     write(&folder, &path, &packed.html).with_context(|| format!("cannot write {}", path.display()))?;
