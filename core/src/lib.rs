@@ -19,3 +19,4 @@ pub mod rig;
 pub mod rotor;
 pub mod section;
 pub mod shape;
+pub mod wood;

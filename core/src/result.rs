@@ -6,6 +6,7 @@ use serde::Serialize;
 mod chart;
 mod fit;
 mod shape;
+mod strength;
 
 pub use chart::{ChartCell, Cost, ErrorCosts, Figure, Limit, Margin, PitchDiameter, Tolerance};
 pub use fit::{
@@ -13,6 +14,7 @@ pub use fit::{
     PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,
 };
 pub use shape::{Bound, Brief, Compared, LeastLoss, LossStation, Origin, Twist, TwistStation};
+pub use strength::Mass;
 
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]

@@ -79,6 +79,16 @@ fn each_wrong_value_is_named_by_its_path() {
         ("/flight_points/2/altitude_m", json!(30_000), "flight_points[2].altitude_m: 30000"),
         ("/flight_points/1/name", json!("Standing start"), "flight_points[1].name"),
         ("/flight_points", json!([]), "flight_points: 0"),
+        ("/wood", json!({}), "wood: missing field `species`"),
+        ("/wood", json!({"species": 7}), "wood.species: 7 is neither"),
+        ("/wood", json!({"species": {"name": "own"}}), "wood.species: missing field `density_kg_m3`"),
+        ("/wood", json!({"species": "pla", "moisture_percent": 90}), "wood.moisture_percent: 90"),
+        ("/wood", json!({"species": "pla", "safety_factor": 0}), "wood.safety_factor: 0"),
+        ("/wood", json!({"species": "pla", "overspeed": 0.9}), "wood.overspeed: 0.9"),
+        ("/wood", json!({"species": "pla", "rake_deg": 40}), "wood.rake_deg: 40"),
+        ("/wood", json!({"species": "pla", "limits": {"shear_pa": 1}}), "wood.limits.shear_pa: 1"),
+        ("/wood", json!({"species": "pla", "limits": {"all": 1}}), "wood.limits.all: unknown field"),
+        ("/wood", json!({"species": "pla", "hub": {"bolts": 6}}), "wood.hub: missing field `thickness_m`"),
         ("/method", json!({"elements": 4}), "method.elements: 4"),
         ("/colour", json!("red"), "colour: unknown field"),
         ("/spokeshave", json!(7), "spokeshave: 7"),
@@ -97,6 +107,46 @@ fn an_empty_battery_is_refused() {
     let Some(Engine::Electric(electric)) = &mut job.engine else { panic!("an electric motor") };
     electric.battery.capacity_ah = 0.0;
     assert_eq!(job.check()[0].path, "engine.battery.capacity_ah");
+}
+
+#[test]
+fn wrong_materials_and_hubs_are_named() {
+    let own = |key: &str, value: f64| {
+        let mut species =
+            json!({"name": "own", "density_kg_m3": 700, "modulus_pa": 1.2e10, "bending_strength_pa": 1e8});
+        species[key] = json!(value);
+        json!({"species": species})
+    };
+    let hub = |key: &str, value: f64| {
+        let mut hub = json!({"thickness_m": 0.1, "flange_diameter_m": 0.15, "bolt_circle_m": 0.1, "bolt_diameter_m": 0.008});
+        hub[key] = json!(value);
+        json!({"species": "white ash", "hub": hub})
+    };
+    let cases = [
+        (own("density_kg_m3", 0.0), "wood.species.density_kg_m3: 0"),
+        (own("modulus_pa", -1.0), "wood.species.modulus_pa: -1"),
+        (own("bending_strength_pa", 1.0), "wood.species.bending_strength_pa: 1"),
+        (own("compression_strength_pa", 1.0), "wood.species.compression_strength_pa: 1"),
+        (own("shear_strength_pa", 1.0), "wood.species.shear_strength_pa: 1"),
+        (own("crushing_strength_pa", 1.0), "wood.species.crushing_strength_pa: 1"),
+        (own("shear_modulus_pa", 1.0), "wood.species.shear_modulus_pa: 1"),
+        (own("scatter", 0.9), "wood.species.scatter: 0.9"),
+        (own("lasting_share", 0.0), "wood.species.lasting_share: 0"),
+        (own("colour", 0.0), "wood.species.colour: unknown field"),
+        (hub("thickness_m", 0.0), "wood.hub.thickness_m: 0"),
+        (hub("flange_diameter_m", 5.0), "wood.hub.flange_diameter_m: 5"),
+        (hub("bore_m", 0.15), "wood.hub.bore_m: 0.15"),
+        (hub("bolt_diameter_m", 0.2), "wood.hub.bolt_diameter_m: 0.2"),
+        (hub("bolt_circle_m", 0.148), "wood.hub.bolt_circle_m: 0.148; allowed is 0.0160 to 0.1420 m"),
+        (hub("bolt_torque_n_m", 0.0), "wood.hub.bolt_torque_n_m: 0"),
+    ];
+    for (wood, expected) in cases {
+        let message = refusal("/wood", wood);
+        assert!(message.contains(expected), "{message:?} has no {expected:?}");
+    }
+    let mut bolts = hub("bore_m", 0.02);
+    bolts["hub"]["bolts"] = json!(0);
+    assert!(refusal("/wood", bolts).contains("wood.hub.bolts: 0"));
 }
 
 #[test]

@@ -10,8 +10,10 @@ use super::found::Found;
 use crate::air::{HIGHEST_M, LARGEST_OFFSET_K, LOWEST_M};
 use crate::section::{check_polars, library};
 use engine::{check_electric, check_piston};
+use wood::check_wood;
 
 mod engine;
+mod wood;
 
 const MOST_STATIONS: usize = 200;
 const MOST_FLIGHT_POINTS: usize = 50;
@@ -40,8 +42,7 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
     found.range("method.elements".into(), f64::from(job.method.elements), 10.0..=400.0, "");
     found.range("method.n_crit".into(), job.method.n_crit, 1.0..=14.0, "");
     if let Some(wood) = &job.wood {
-        text(&mut found, "wood.species", &wood.species, 1);
-        found.optional("wood.laminations".into(), wood.laminations.map(f64::from), 1.0..=60.0, "");
+        check_wood(&mut found, wood, &job.propeller);
     }
     found.0
 }

@@ -7,6 +7,7 @@ mod aircraft;
 mod engine;
 mod flight_point;
 mod propeller;
+mod wood;
 
 pub use aircraft::{Aeroplane, Aircraft, Drag, Multirotor};
 pub use engine::{
@@ -14,6 +15,7 @@ pub use engine::{
 };
 pub use flight_point::{FlightPoint, Setting};
 pub use propeller::{AngleReference, PitchControl, Propeller, Rotation, Station};
+pub use wood::{Hub, OwnMaterial, Species, StressLimits, USUAL_SPECIES, Wood};
 
 use serde::{Deserialize, Serialize};
 
@@ -75,18 +77,6 @@ pub struct Section {
     pub korn_factor: f64,
     /// The polars.
     pub polars: Vec<Polar>,
-}
-
-/// What the blade is made of.
-#[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
-#[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
-#[serde(deny_unknown_fields)]
-pub struct Wood {
-    /// Species.
-    pub species: String,
-    /// Number of laminations.
-    #[serde(default, skip_serializing_if = "Option::is_none")]
-    pub laminations: Option<u32>,
 }
 
 /// How the blade is computed.

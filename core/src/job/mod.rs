@@ -14,8 +14,8 @@ pub use check::section_name_known;
 pub use demo::{DEMOS, Demo};
 pub use document::{
     Aeroplane, Aircraft, AltitudeLaw, AngleReference, Battery, Drag, Electric, Engine, FlightPoint, HeldTo,
-    HeldToKind, Interpolation, Job, LoadPoint, Method, Multirotor, Piston, PitchControl, PowerPoint,
-    Propeller, Rotation, Section, Setting, Station, Wood,
+    HeldToKind, Hub, Interpolation, Job, LoadPoint, Method, Multirotor, OwnMaterial, Piston, PitchControl,
+    PowerPoint, Propeller, Rotation, Section, Setting, Species, Station, StressLimits, USUAL_SPECIES, Wood,
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 

@@ -4,6 +4,7 @@
 
 mod airfoils;
 mod analyse;
+mod bench;
 mod fit;
 mod import;
 mod input;
@@ -34,6 +35,7 @@ const EXAMPLES: &str = "Examples:
   spokeshave fit JOB.json --vary propeller.diameter_m=1.4..1.7:31    the same over any number of the file, CSV
   spokeshave shape JOB.json twist --point Cruise   angles that put every station at its best lift-to-drag
   spokeshave shape JOB.json least-loss --point Cruise --job > NEW.json    least induced loss, as a job of its own
+  spokeshave bench JOB.json strength               weight and balance of the blade in its wood
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
@@ -53,6 +55,8 @@ enum Command {
     Fit(fit::Args),
     /// A better blade for the job, as a variant beside the drawn one
     Shape(shape::Args),
+    /// Will it hold: weight and strength of the blade
+    Bench(bench::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),
     /// Departure over speed and radius at a flight point's air
@@ -76,6 +80,7 @@ fn main() -> ExitCode {
         Command::Analyse(args) => analyse::run(&args),
         Command::Fit(args) => fit::run(&args),
         Command::Shape(args) => shape::run(&args),
+        Command::Bench(args) => bench::run(&args),
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),

@@ -26,6 +26,7 @@ pub use error::{OutlineError, Place};
 pub use face::Face;
 pub use families::{arc_back, clark_y, naca_16_series, naca_four_digit, raf_6};
 pub use measure::Measures;
+pub(crate) use measure::{interpolate, sides};
 pub use read::MAX_BYTES;
 pub(crate) use spline::Curve;
 

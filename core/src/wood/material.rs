@@ -1,0 +1,156 @@
+//! The material of a job: what the wood is worth at its moisture, and how much of that may be asked of it.
+
+use super::WoodError;
+use super::moisture::at_moisture;
+use super::species::{Kind, SPECIES, Species};
+use crate::job::{OwnMaterial, Species as Named, Wood};
+
+/// A material as the blade has it.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Material {
+    /// The name for people.
+    pub title: String,
+    /// Where the values come from.
+    pub source: String,
+    /// Density, kg/m³.
+    pub density_kg_m3: f64,
+    /// Young's modulus along the blade, Pa.
+    pub modulus_pa: f64,
+    /// Shear modulus, Pa.
+    pub shear_modulus_pa: f64,
+    /// Tension along the blade.
+    pub tension: Strength,
+    /// Compression along the blade.
+    pub compression: Strength,
+    /// Shear along the grain.
+    pub shear: Strength,
+    /// Crushing across the grain, where plates and bolts press.
+    pub crushing: Strength,
+}
+
+/// How much of a strength may be asked: `mean (1 − 1.645 scatter) lasting / safety`, or the user's own limit.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Strength {
+    /// Mean strength of the material at its moisture, Pa.
+    pub mean_pa: f64,
+    /// Most stress, Pa.
+    pub limit_pa: f64,
+    /// How the limit came about.
+    pub reason: String,
+}
+
+/// What is taken off a mean strength.
+#[derive(Clone, Copy)]
+struct Taken {
+    scatter: f64,
+    lasting: f64,
+    safety: f64,
+}
+
+/// Coefficients of variation of clear wood: bending, compression along, shear, compression across (Wood Handbook, FPL-GTR-190, Table 5-6;
+/// from memory).
+const WOOD_SCATTER: [f64; 4] = [0.16, 0.18, 0.14, 0.28];
+/// Share of the static strength that clear straight-grained wood keeps over tens of millions of loadings (Wood Handbook,
+/// FPL-GTR-190, chapter 5, fatigue; from memory).
+const WOOD_LASTS: f64 = 0.5;
+/// Moisture at which a wood's density is given, percent.
+const USUAL_MOISTURE: f64 = 12.0;
+
+/// Scatter of the four strengths and what lasts, by kind; for other materials than wood from memory, on the low side.
+fn habits(kind: Kind) -> ([f64; 4], f64) {
+    match kind {
+        Kind::Wood => (WOOD_SCATTER, WOOD_LASTS),
+        Kind::Plastic => ([0.10; 4], 0.3),
+        Kind::Composite => ([0.10; 4], 0.4),
+    }
+}
+
+/// The material of a job.
+///
+/// # Errors
+/// [`WoodError::UnknownSpecies`] for a name that is not in [`SPECIES`].
+pub fn material(wood: &Wood) -> Result<Material, WoodError> {
+    let mut m = match &wood.species {
+        Named::Own(own) => own_material(own, wood),
+        Named::Named(name) => {
+            let species = Species::named(name).ok_or_else(|| WoodError::UnknownSpecies {
+                name: name.clone(),
+                known: SPECIES.iter().map(|s| s.name).collect::<Vec<_>>().join(", "),
+            })?;
+            known_material(species, wood)
+        }
+    };
+    for (strength, own) in [
+        (&mut m.tension, wood.limits.tension_pa),
+        (&mut m.compression, wood.limits.compression_pa),
+        (&mut m.shear, wood.limits.shear_pa),
+    ] {
+        if let Some(limit_pa) = own {
+            strength.limit_pa = limit_pa;
+            strength.reason = format!("{:.1} MPa: the job's own limit", limit_pa / 1e6);
+        }
+    }
+    Ok(m)
+}
+
+fn known_material(s: &Species, wood: &Wood) -> Material {
+    let moisture = wood.moisture_percent;
+    let wet = |[dry, green]: [f64; 2]| 1e6 * at_moisture(dry, green, s.meets_percent, moisture);
+    let modulus_pa = wet(s.modulus_mpa);
+    let ([bending, along, shear, across], lasting) = habits(s.kind);
+    let strength = |mpa, scatter| Taken { scatter, lasting, safety: wood.safety_factor }.off(wet(mpa));
+    // The oven-dry wood stays, its water changes; the swelling of the volume is left out, less than 2 %.
+    let heavier = match s.kind {
+        Kind::Wood => (100.0 + moisture) / (100.0 + USUAL_MOISTURE),
+        Kind::Plastic | Kind::Composite => 1.0,
+    };
+    Material {
+        title: s.title.into(),
+        source: s.source.into(),
+        density_kg_m3: s.density_kg_m3 * heavier,
+        modulus_pa,
+        shear_modulus_pa: s.shear_share * modulus_pa,
+        tension: strength(s.bending_mpa, bending),
+        compression: strength(s.compression_mpa, along),
+        shear: strength(s.shear_mpa, shear),
+        crushing: strength(s.crushing_mpa, across),
+    }
+}
+
+fn own_material(own: &OwnMaterial, wood: &Wood) -> Material {
+    let bending = own.bending_strength_pa;
+    let strength = |pa: f64, i: usize| {
+        let scatter = own.scatter.unwrap_or(WOOD_SCATTER[i]);
+        let lasting = own.lasting_share.unwrap_or(WOOD_LASTS);
+        Taken { scatter, lasting, safety: wood.safety_factor }.off(pa)
+    };
+    Material {
+        title: own.name.clone(),
+        source: "the job's own values".into(),
+        density_kg_m3: own.density_kg_m3,
+        modulus_pa: own.modulus_pa,
+        shear_modulus_pa: own.shear_modulus_pa.unwrap_or(own.modulus_pa / 14.0),
+        tension: strength(bending, 0),
+        compression: strength(own.compression_strength_pa.unwrap_or(bending / 2.0), 1),
+        shear: strength(own.shear_strength_pa.unwrap_or(bending / 10.0), 2),
+        crushing: strength(own.crushing_strength_pa.unwrap_or(bending / 15.0), 3),
+    }
+}
+
+impl Taken {
+    /// One in twenty pieces is weaker than `mean (1 − 1.645 scatter)` where strength is normally distributed.
+    fn off(self, mean_pa: f64) -> Strength {
+        let low = mean_pa * (1.0 - 1.645 * self.scatter);
+        let limit_pa = low * self.lasting / self.safety;
+        let reason = format!(
+            "{:.1} MPa: mean {:.1}, of which 19 pieces in 20 reach {:.1} (scatter {:.0} %), {:.0} % of that under repeated load, over a safety factor of {}",
+            limit_pa / 1e6,
+            mean_pa / 1e6,
+            low / 1e6,
+            100.0 * self.scatter,
+            100.0 * self.lasting,
+            self.safety
+        );
+        Strength { mean_pa, limit_pa, reason }
+    }
+}
