@@ -3,6 +3,7 @@
 use std::hint::black_box;
 
 use criterion::{Criterion, criterion_group, criterion_main};
+use spokeshave::fit::Along;
 use spokeshave::job::{DEMOS, Job};
 use spokeshave::report::station;
 use spokeshave::rig::Rig;
@@ -51,7 +52,9 @@ fn lookups_alone(c: &mut Criterion) {
 
 fn map(c: &mut Criterion) {
     let (rig, _) = rig(40);
-    c.bench_function("departure map, 60 speeds x 40 radii", |b| b.iter(|| rig.map(black_box(2), 60, 40)));
+    c.bench_function("departure map, 60 speeds x 40 radii", |b| {
+        b.iter(|| rig.map(black_box(2), Along::FullThrottle, 60, 40))
+    });
 }
 
 fn edit(c: &mut Criterion) {

@@ -41,10 +41,10 @@ pub use ceiling::ceilings;
 pub use crossings::crossings;
 pub use envelope::envelope;
 pub use held::held;
-pub use line::line;
+pub use line::{Along, level_line, line};
 pub use matched::matched;
 pub use meeting::meeting;
-pub use offer::{Offer, offer};
+pub use offer::{Offer, offer, offer_crossings};
 pub use take_off::take_off;
 pub use worth::pitch_worth;
 

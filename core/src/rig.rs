@@ -6,6 +6,7 @@ use crate::air::{Air, AirError};
 use crate::aircraft::propellers;
 use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
+use crate::fit::Along;
 use crate::job::{FlightPoint, Job, PitchControl, Propeller};
 use crate::result::{Analysis, Fit, Note, PitchWorth, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
@@ -119,12 +120,16 @@ impl Rig {
         report::section_curve(&self.rotor, &self.rotor.ring(r), &at)
     }
 
-    /// The departure map at a flight point's air, along [`fit::line`], from the hub to the tip.
+    /// The departure map at a flight point's air, along [`fit::line`] or [`fit::level_line`], from the hub to the tip.
+    /// `None` where the flight point has no answer or nothing is flown level.
     #[must_use]
-    pub fn map(&self, index: usize, speeds: u32, radii: u32) -> Option<DepartureMap> {
+    pub fn map(&self, index: usize, along: Along, speeds: u32, radii: u32) -> Option<DepartureMap> {
         let at = self.condition(index)?;
-        let line = fit::line(self, &at, speeds);
-        Some(departure_map(&self.rotor, &line, &self.map_radii_m(radii)))
+        let line = match along {
+            Along::FullThrottle => fit::line(self, &at, speeds),
+            Along::Level => fit::level_line(self, &at, speeds),
+        };
+        (!line.is_empty()).then(|| departure_map(&self.rotor, &line, &self.map_radii_m(radii)))
     }
 
     /// The whole fit at a flight point's air: the speed range with `speeds` speeds, take-off, ceilings. What a

@@ -5,6 +5,7 @@ mod any_job;
 use any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
+use spokeshave::fit::Along;
 use spokeshave::job::{AngleReference, DEMOS, Job, Setting};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::Condition;
@@ -69,7 +70,7 @@ proptest! {
             }
         }
         for index in 0..2 {
-            if let Some(map) = rig.map(index, 7, 5) {
+            if let Some(map) = rig.map(index, Along::FullThrottle, 7, 5) {
                 prop_assert!(map.cells.iter().all(|c| c.departure_deg.is_none_or(f64::is_finite)));
                 prop_assert!(map.cells.iter().all(|c| c.share_of_best.is_none_or(f64::is_finite)));
             }

@@ -5,7 +5,7 @@ use std::rc::Rc;
 
 use gloo_events::EventListener;
 use spokeshave::drawn::DrawnStation;
-use spokeshave::fit::Offer;
+use spokeshave::fit::Along;
 use spokeshave::job::Job;
 use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use spokeshave::rig::Rig;
@@ -16,7 +16,7 @@ use yew::prelude::*;
 use crate::effect::remembered::Remembered;
 use crate::effect::{file, keys, theme};
 use crate::later::{Plan, Work};
-use crate::results::Results;
+use crate::results::{Offered, Results};
 use crate::state::{Action, State};
 use crate::view::page::Page;
 use crate::{keep, view};
@@ -87,12 +87,14 @@ pub struct Later {
     pub point: usize,
     /// Every flight point, in order.
     pub points: Vec<Rc<Option<PointResult>>>,
+    /// What the map follows.
+    pub along: Along,
     /// The departure map at the flight point selected.
     pub map: Rc<Option<DepartureMap>>,
     /// The coefficient curves there.
     pub curves: Rc<Vec<CurvePoint>>,
     /// What the shaft offers and the propeller takes there; empty while the Engine panel is closed.
-    pub offer: Rc<Vec<Offer>>,
+    pub offer: Rc<Offered>,
     /// The speed range in its air; not there while the Fit panel is closed.
     pub envelope: Option<Rc<Option<Envelope>>>,
     /// Take-off there.
@@ -135,10 +137,10 @@ fn use_later(results: &Rc<RefCell<Results>>, now: &Rc<Now>, state: &State) -> Rc
     let later = use_state_eq(Rc::<Later>::default);
     let work = use_mut_ref(|| None::<Work>);
     let (results, setter, before) = (results.clone(), later.setter(), (*later).clone());
-    let key = (now.job.clone(), state.point, state.drag.is_some(), state.opened);
-    use_effect_with(key, move |(job, point, dragging, opened)| {
+    let key = (now.job.clone(), state.point, state.drag.is_some(), state.along, state.opened);
+    use_effect_with(key, move |(job, point, dragging, along, opened)| {
         let count = job.0.flight_points.len();
-        let plan = Plan { count, point: *point, dragging: *dragging, opened: *opened };
+        let plan = Plan { count, point: *point, dragging: *dragging, along: *along, opened: *opened };
         // Putting off the new work calls off the old.
         *work.borrow_mut() = Some(Work::begin(plan, results, before, setter));
     });

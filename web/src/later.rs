@@ -5,6 +5,7 @@ use std::cell::RefCell;
 use std::rc::Rc;
 
 use gloo_timers::callback::Timeout;
+use spokeshave::fit::Along;
 use yew::UseStateSetter;
 
 use crate::app::{Later, RigRef};
@@ -22,6 +23,8 @@ pub struct Plan {
     pub point: usize,
     /// Whether something is being dragged: then the map and the curves stay as they are.
     pub dragging: bool,
+    /// What the map follows.
+    pub along: Along,
     /// Which panels are open.
     pub opened: Opened,
 }
@@ -120,7 +123,7 @@ impl Bench {
         match piece {
             Piece::Point(i) => drop(results.point(i)),
             Piece::Curves => drop(results.curves(self.plan.point)),
-            Piece::Map => drop(results.map(self.plan.point)),
+            Piece::Map => drop(results.map(self.plan.point, self.plan.along)),
             Piece::Offer => drop(results.offer(self.plan.point)),
             Piece::Envelope => drop(results.envelope(self.plan.point)),
             Piece::Ceilings => results.work_ceilings(self.plan.point),
@@ -142,7 +145,8 @@ impl Bench {
         if so_far == Piece::Show {
             return now;
         }
-        (now.map, now.curves) = (results.map(point), results.curves(point));
+        now.along = self.plan.along;
+        (now.map, now.curves) = (results.map(point, now.along), results.curves(point));
         if so_far == Piece::ShowMap {
             return now;
         }
@@ -161,7 +165,8 @@ mod tests {
 
     #[test]
     fn the_map_waits_until_a_drag_is_over() {
-        let plan = Plan { count: 2, point: 0, dragging: true, opened: Opened::default() };
+        let plan =
+            Plan { count: 2, point: 0, dragging: true, along: Along::default(), opened: Opened::default() };
         assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Show]);
         let all = Plan { dragging: false, ..plan }.pieces();
         assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::ShowMap]);
@@ -169,7 +174,8 @@ mod tests {
 
     #[test]
     fn a_closed_panel_is_not_worked_out() {
-        let closed = Plan { count: 1, point: 0, dragging: false, opened: Opened::default() };
+        let closed =
+            Plan { count: 1, point: 0, dragging: false, along: Along::default(), opened: Opened::default() };
         for (part, piece) in [(Part::Engine, Piece::Offer), (Part::Fit, Piece::Envelope)] {
             assert!(!closed.pieces().contains(&piece));
             let open = Plan { opened: Opened::default().with(part, true), ..closed };

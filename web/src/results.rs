@@ -4,9 +4,9 @@
 use std::rc::Rc;
 
 use spokeshave::drawn::{DrawnStation, stations};
-use spokeshave::fit::{self, Offer};
+use spokeshave::fit::{self, Along, Offer};
 use spokeshave::job::{FlightPoint, Job};
-use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, SectionPoint, TakeOff};
+use spokeshave::result::{Ceilings, Crossing, Envelope, PitchWorth, PointResult, SectionPoint, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 
@@ -50,15 +50,24 @@ impl<K: PartialEq + Clone, V> Shelf<K, V> {
     }
 }
 
+/// What the shaft offers and the propeller takes over rpm at a flight point.
+#[derive(Clone, Debug, Default, PartialEq)]
+pub struct Offered {
+    /// Both over rpm.
+    pub curve: Vec<Offer>,
+    /// Where they agree.
+    pub crossings: Vec<Crossing>,
+}
+
 /// The results of one propeller.
 #[derive(Debug, Default)]
 pub struct Results {
     rig: Option<Rc<Rig>>,
     drawn: Rc<Vec<DrawnStation>>,
     points: Shelf<FlightPoint, Option<PointResult>>,
-    maps: Shelf<FlightPoint, Option<DepartureMap>>,
+    maps: Shelf<(FlightPoint, Along), Option<DepartureMap>>,
     curves: Shelf<FlightPoint, Vec<CurvePoint>>,
-    offers: Shelf<FlightPoint, Vec<Offer>>,
+    offers: Shelf<FlightPoint, Offered>,
     /// By height and temperature offset.
     envelopes: Shelf<[f64; 2], Option<Envelope>>,
     /// By temperature offset.
@@ -107,9 +116,9 @@ impl Results {
     }
 
     /// The departure map at a flight point.
-    pub fn map(&mut self, i: usize) -> Rc<Option<DepartureMap>> {
+    pub fn map(&mut self, i: usize, along: Along) -> Rc<Option<DepartureMap>> {
         let Some((rig, key)) = self.at(i) else { return Rc::new(None) };
-        self.maps.get(&key, || rig.map(i, MAP_SPEEDS, MAP_RADII))
+        self.maps.get(&(key, along), || rig.map(i, along, MAP_SPEEDS, MAP_RADII))
     }
 
     /// The coefficient curves at a flight point.
@@ -119,9 +128,11 @@ impl Results {
     }
 
     /// What the shaft offers and the propeller takes over rpm at a flight point.
-    pub fn offer(&mut self, i: usize) -> Rc<Vec<Offer>> {
+    pub fn offer(&mut self, i: usize) -> Rc<Offered> {
         let Some((rig, key)) = self.at(i) else { return Rc::default() };
-        self.offers.get(&key, || fit::offer(&rig, i, OFFER_STEPS))
+        let worked_out =
+            || Offered { curve: fit::offer(&rig, i, OFFER_STEPS), crossings: fit::offer_crossings(&rig, i) };
+        self.offers.get(&key, worked_out)
     }
 
     /// The speed range in a flight point's air, with the departure at every station.
@@ -201,7 +212,7 @@ mod tests {
         let job = demo();
         let mut results = Results::default();
         assert_eq!(*results.of(&job).point(2), Rig::new(&job).unwrap().point(2));
-        assert!(results.map(2).is_some());
+        assert!(results.map(2, Along::FullThrottle).is_some());
         assert_eq!(results.drawn().len(), job.propeller.stations.len());
     }
 
@@ -209,12 +220,12 @@ mod tests {
     fn what_does_not_change_is_not_worked_out_again() {
         let mut job = demo();
         let mut results = Results::default();
-        let (point, map) = (results.of(&job).point(2), results.map(2));
+        let (point, map) = (results.of(&job).point(2), results.map(2, Along::FullThrottle));
         job.title = "another".into();
         job.flight_points[0].altitude_m = 500.0;
         results.of(&job);
         assert!(Rc::ptr_eq(&point, &results.point(2)));
-        assert!(Rc::ptr_eq(&map, &results.map(2)));
+        assert!(Rc::ptr_eq(&map, &results.map(2, Along::FullThrottle)));
         assert!(!Rc::ptr_eq(&results.point(0), &results.point(1)));
     }
 

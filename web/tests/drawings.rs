@@ -1,5 +1,6 @@
 //! Every drawing, rendered to text without a browser, for every example and flight point.
 
+use spokeshave::fit::Along;
 use spokeshave::job::{DEMOS, Job};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rig::Rig;
@@ -8,6 +9,7 @@ use spokeshave_web::blade_view::{
 };
 use spokeshave_web::chart::line::{Axis, LineChart, Series};
 use spokeshave_web::chart::unit::Unit;
+use spokeshave_web::results::Offered;
 use spokeshave_web::state::{Action, State};
 use spokeshave_web::view::Seen;
 use spokeshave_web::view::fit::FitPanel;
@@ -70,7 +72,7 @@ fn BladeDrawings(shown: &Shown) -> Html {
 fn MapDrawing(shown: &Shown) -> Html {
     let job = job(shown);
     let rig = Rig::new(&job).expect("examples are valid");
-    let Some(map) = rig.map(shown.point, 60, 40) else { return html! { "no map" } };
+    let Some(map) = rig.map(shown.point, Along::FullThrottle, 60, 40) else { return html! { "no map" } };
     let points: Vec<PointResult> = (0..job.flight_points.len()).filter_map(|i| rig.point(i)).collect();
     let mark = |(i, p): (usize, &PointResult)| FlightMark {
         name: p.name.clone().into(),
@@ -97,8 +99,9 @@ fn state(shown: &Shown) -> State {
 fn MachinePanels(shown: &Shown) -> Html {
     let state = Seen::new(Rc::new(state(shown)));
     let rig = Rig::new(state.job()).expect("examples are valid");
-    let (offer, point) =
-        (Rc::new(spokeshave::fit::offer(&rig, shown.point, 48)), Rc::new(rig.point(shown.point)));
+    let curve = spokeshave::fit::offer(&rig, shown.point, 48);
+    let crossings = spokeshave::fit::offer_crossings(&rig, shown.point);
+    let (offer, point) = (Rc::new(Offered { curve, crossings }), Rc::new(rig.point(shown.point)));
     html! {
         <>
             <AircraftPanel state={state.clone()} />
@@ -196,7 +199,7 @@ fn aircraft_and_engine_are_drawn_for_every_example_and_flight_point() {
         let (hovers, piston) = (demo == 2, demo == 0);
         assert_eq!(text.contains("To hover each rotor has to hold"), hovers, "{shown:?}");
         assert_eq!(text.contains("Speeds of the aircraft"), !hovers, "{shown:?}");
-        assert_eq!(text.contains("Remove row 5"), piston, "{shown:?}");
+        assert_eq!(text.contains("Full-throttle curve: remove row 5"), piston, "{shown:?}");
         assert_eq!(text.contains("Cells in series"), !piston, "{shown:?}");
         assert!(text.contains("full throttle") && text.contains("propeller at"), "{shown:?}");
     }

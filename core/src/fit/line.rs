@@ -1,15 +1,35 @@
-//! The line of conditions along which the departure map is drawn.
+//! The lines of conditions along which the departure map is drawn.
 
 use super::full::run_up;
 use super::trail::Trail;
-use super::{Solver, highest_rpm, rpm_of};
+use super::{Solver, highest_rpm, rpm_of, top_speed};
+use crate::aircraft::speeds;
 use crate::curve::Curve;
+use crate::job::Aircraft;
 use crate::result::State;
 use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, thrustless_speed_m_s};
 
 /// Speeds at which the full-throttle rpm is worked out; between them it follows a monotone cubic.
 const NODES: u32 = 8;
+/// The same of level flight, whose rpm bends more.
+const LEVEL_NODES: u32 = 16;
+/// Where level flight of an aircraft without a known stall begins, as a share of the speed of least power.
+const SLOWEST_SHARE: f64 = 0.7;
+/// Where it ends without an engine that sets its end, as a share of the fast-cruise speed.
+const FASTEST_SHARE: f64 = 1.5;
+/// Where it ends for a multirotor without such an engine, m/s.
+const FASTEST_CLIMB_M_S: f64 = 10.0;
+
+/// What a line of conditions follows.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
+pub enum Along {
+    /// Full throttle.
+    #[default]
+    FullThrottle,
+    /// Level flight at part throttle; hover and steady climb of a multirotor.
+    Level,
+}
 
 /// Conditions at equal steps of speed from rest, at the air of `at`: at full throttle as far as the engine can be
 /// matched and, where its limit rpm is what ends that, on at that rpm (throttled back); without an engine at the rpm
@@ -20,21 +40,61 @@ pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     let step = |end: f64, i: u32, of: u32| end * f64::from(i) / f64::from(of);
     let end = thrustless_speed_m_s(&rig.rotor, at);
     let nodes: Vec<Condition> = full_throttle(rig, at, (0..=NODES).map(|i| step(end, i, NODES)));
-    let speed: Vec<f64> = nodes.iter().map(|c| c.airspeed_m_s).collect();
-    let rpm = Curve::new(speed.clone(), nodes.iter().map(rpm_of).collect());
-    let turn = Curve::new(speed.clone(), nodes.iter().map(|c| c.turn_rad).collect());
-    match (rpm, turn, speed.last()) {
-        (Some(rpm), Some(turn), Some(&last)) if speed.len() > 2 => (0..count)
-            .map(|i| step(last, i, count - 1))
-            .map(|v| Condition {
-                airspeed_m_s: v,
-                rotation_rad_s: rotation_rad_s(rpm.at(v)),
-                turn_rad: turn.at(v),
-                ..*at
-            })
-            .collect(),
-        _ => (0..count).map(|i| Condition { airspeed_m_s: step(end, i, count - 1), ..*at }).collect(),
+    between(&nodes, count).unwrap_or_else(|| {
+        (0..count).map(|i| Condition { airspeed_m_s: step(end, i, count - 1), ..*at }).collect()
+    })
+}
+
+/// Conditions at equal steps of speed along level flight at the air of `at`: from the stall (or somewhat below the
+/// speed of least power) to the fastest level flight of the engine. Empty without an aircraft and where nothing is flown level.
+#[must_use]
+pub fn level_line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
+    let Some((slowest, fastest)) = level_span_m_s(rig, at) else { return Vec::new() };
+    let solver = Solver::new(rig);
+    let mut trail = Trail::default();
+    let nodes: Vec<Condition> = (0..=LEVEL_NODES)
+        .map(|i| slowest + (fastest - slowest) * f64::from(i) / f64::from(LEVEL_NODES))
+        .filter_map(|v| {
+            let met = solver.level_by_thrust(&Condition { airspeed_m_s: v, ..*at }, &trail).ok()?;
+            trail.push(&met);
+            Some(met.condition)
+        })
+        .collect();
+    between(&nodes, speeds.max(2)).unwrap_or_default()
+}
+
+/// The slowest and the fastest level flight.
+fn level_span_m_s(rig: &Rig, at: &Condition) -> Option<(f64, f64)> {
+    let top = top_speed::fastest(rig, at).ok().map(|full| full.condition.airspeed_m_s);
+    match rig.job.aircraft.as_ref()? {
+        Aircraft::Aeroplane(a) => {
+            let named = speeds(a, &at.air);
+            let slowest = named.stall_m_s.unwrap_or(SLOWEST_SHARE * named.least_power_m_s);
+            Some((slowest, top.unwrap_or(FASTEST_SHARE * named.fast_cruise_m_s).max(1.05 * slowest)))
+        }
+        Aircraft::Multirotor(_) => Some((0.0, top.unwrap_or(FASTEST_CLIMB_M_S))),
     }
+}
+
+/// Conditions at equal steps of speed between the first and the last of a few, rpm and blade angle following monotone cubics; `None` where
+/// there are too few.
+fn between(nodes: &[Condition], count: u32) -> Option<Vec<Condition>> {
+    let (first, last) = (nodes.first()?, nodes.last()?);
+    if nodes.len() < 3 {
+        return None;
+    }
+    let speed: Vec<f64> = nodes.iter().map(|c| c.airspeed_m_s).collect();
+    let rpm = Curve::new(speed.clone(), nodes.iter().map(rpm_of).collect())?;
+    let turn = Curve::new(speed, nodes.iter().map(|c| c.turn_rad).collect())?;
+    let (low, high) = (first.airspeed_m_s, last.airspeed_m_s);
+    let at = |v: f64| Condition {
+        airspeed_m_s: v,
+        rotation_rad_s: rotation_rad_s(rpm.at(v)),
+        turn_rad: turn.at(v),
+        ..*first
+    };
+    let last = count - 1;
+    Some((0..=last).map(|i| at(low + (high - low) * f64::from(i) / f64::from(last))).collect())
 }
 
 /// Full-throttle conditions at rising speeds, held to the limit rpm, up to the first that has none.
@@ -67,6 +127,8 @@ fn full_throttle(rig: &Rig, at: &Condition, speeds: impl Iterator<Item = f64>) -
 #[cfg(test)]
 mod tests {
     use super::*;
+    use crate::aircraft::thrust_asked_n;
+    use crate::fit::slipstream::kept_share;
     use crate::job::{DEMOS, Job};
 
     #[test]
@@ -82,5 +144,29 @@ mod tests {
                 rig.shaft.as_ref().and_then(crate::engine::Shaft::limit_rpm).unwrap_or(f64::INFINITY);
             assert!(line.iter().all(|c| rpm_of(c) <= highest * (1.0 + 1e-9)), "{}", point.name);
         }
+    }
+
+    #[test]
+    fn thrust_equals_what_is_asked_along_level_flight() {
+        for demo in DEMOS {
+            let job = Job::from_json(demo.json).unwrap();
+            let rig = Rig::new(&job).unwrap();
+            let at = (0..job.flight_points.len()).find_map(|i| rig.condition(i)).unwrap();
+            let line = level_line(&rig, &at, 60);
+            assert_eq!(line.len(), 60, "{}", demo.name);
+            for c in &line {
+                let asked = thrust_asked_n(job.aircraft.as_ref().unwrap(), &c.air, c.airspeed_m_s).unwrap();
+                let thrust = rig.rotor.loads(c).thrust_n * kept_share(&rig);
+                assert!((thrust / asked - 1.0).abs() < 0.01, "{}: {thrust} of {asked} N", demo.name);
+            }
+        }
+    }
+
+    #[test]
+    fn without_an_aircraft_nothing_is_flown_level() {
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        let at = Rig::new(&job).unwrap().condition(0).unwrap();
+        job.aircraft = None;
+        assert!(level_line(&Rig::new(&job).unwrap(), &at, 60).is_empty());
     }
 }

@@ -2,14 +2,17 @@
 
 use serde::Serialize;
 
-use super::{condition, power_w};
+use super::{condition, crossings, power_w};
 use crate::air::Air;
+use crate::result::Crossing;
 use crate::rig::{Rig, air_of, rotation_rad_s};
 use crate::rotor::Condition;
 
 /// Offer and demand at one rpm.
 #[derive(Clone, Copy, Debug, PartialEq, Serialize)]
 pub struct Offer {
+    /// Propeller rpm.
+    pub propeller_rpm: f64,
     /// Engine or motor rpm.
     pub engine_rpm: f64,
     /// Shaft power at full throttle in the flight point's air, W.
@@ -24,22 +27,15 @@ pub struct Offer {
 /// where it has no airspeed); empty without an engine or such a point.
 #[must_use]
 pub fn offer(rig: &Rig, index: usize, count: u32) -> Vec<Offer> {
-    let (Some(shaft), Some(point)) = (&rig.shaft, rig.job.flight_points.get(index)) else {
-        return Vec::new();
-    };
-    let (Ok(air), Ok(sea_level)) = (air_of(point), Air::standard(0.0, 0.0)) else { return Vec::new() };
-    let still = Condition {
-        air,
-        airspeed_m_s: point.airspeed_m_s.unwrap_or(0.0),
-        rotation_rad_s: 1.0,
-        turn_rad: rig.turn_rad(),
-    };
-    let met = condition(rig, point, air).unwrap_or(still);
+    let (Some(shaft), Some(met)) = (&rig.shaft, looked_at(rig, index)) else { return Vec::new() };
+    let Ok(sea_level) = Air::standard(0.0, 0.0) else { return Vec::new() };
+    let air = met.air;
     let (low, high) = shaft.rpm_range();
     let last = count.max(2) - 1;
     let at = |rpm: f64| {
         let here = Condition { rotation_rad_s: rotation_rad_s(rpm), ..met };
         Offer {
+            propeller_rpm: rpm,
             engine_rpm: rpm * shaft.gear_ratio(),
             offered_w: shaft.power_w(rpm, &air, 1.0),
             at_sea_level_w: shaft.power_w(rpm, &sea_level, 1.0),
@@ -47,6 +43,25 @@ pub fn offer(rig: &Rig, index: usize, count: u32) -> Vec<Offer> {
         }
     };
     (0..=last).map(|i| at(low + (high - low) * f64::from(i) / f64::from(last))).collect()
+}
+
+/// The airspeed, air and blade setting of a flight point; at rest where it has no airspeed and no answer.
+fn looked_at(rig: &Rig, index: usize) -> Option<Condition> {
+    let point = rig.job.flight_points.get(index)?;
+    let air = air_of(point).ok()?;
+    let still = Condition {
+        air,
+        airspeed_m_s: point.airspeed_m_s.unwrap_or(0.0),
+        rotation_rad_s: 1.0,
+        turn_rad: rig.turn_rad(),
+    };
+    Some(condition(rig, point, air).unwrap_or(still))
+}
+
+/// Every rpm at which offer and demand agree there; see [`crossings`].
+#[must_use]
+pub fn offer_crossings(rig: &Rig, index: usize) -> Vec<Crossing> {
+    looked_at(rig, index).map_or_else(Vec::new, |at| crossings(rig, &at))
 }
 
 #[cfg(test)]

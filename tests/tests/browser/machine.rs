@@ -61,7 +61,7 @@ async fn a_row_of_the_engines_curve_is_added_and_taken_back() -> Result<()> {
         };
         browser.open_page().await?;
         let before = rows().await?;
-        browser.press("Add a row after row 2").await?;
+        browser.press("Full-throttle curve: add a row after row 2").await?;
         browser.wait("a row more", async || Ok((rows().await? == before + 1).then_some(()))).await?;
         assert_eq!(browser.control("textbox", NEW).await?.value().await?, "2600");
         browser.control_starting("button", "Undo: add a row").await?.click().await?;

@@ -1,5 +1,7 @@
 //! What can happen on the page.
 
+use spokeshave::fit::Along;
+
 use super::{Choice, Field, Held, Notice, Part, Running, Theme};
 use crate::units::Units;
 
@@ -48,6 +50,8 @@ pub enum Action {
     Blank,
     /// Units were picked.
     Units(Units),
+    /// The line that the departure map follows was picked.
+    Along(Along),
     /// Colours were picked.
     Theme(Theme),
     /// Something has to be said.

@@ -27,6 +27,8 @@ pub enum Field {
     FineStop,
     /// Coarse stop.
     CoarseStop,
+    /// By how much the body behind slows the air at the propeller.
+    Blockage,
     /// A measure of a station.
     Station(usize, Measure),
     /// A figure of a flight point.
@@ -47,6 +49,7 @@ impl Field {
             Self::Blades | Self::Elements => Quantity::Count,
             Self::Title | Self::Point(_, PointFigure::Name) => Quantity::Number,
             Self::GovernedRpm => Quantity::Rpm,
+            Self::Blockage => Quantity::Share,
             Self::Turn
             | Self::FineStop
             | Self::CoarseStop
@@ -77,6 +80,7 @@ impl Field {
             Self::GovernedRpm => "governed rpm".into(),
             Self::FineStop => "fine stop".into(),
             Self::CoarseStop => "coarse stop".into(),
+            Self::Blockage => "air slowed by the body behind".into(),
             Self::Station(i, measure) => format!("{} at station {}", measure.name(), i + 1),
             Self::Point(i, figure) => {
                 let name = job.flight_points.get(i).map_or("", |p| p.name.as_str());
@@ -100,6 +104,7 @@ impl Field {
             Self::GovernedRpm => "propeller.pitch_control.rpm".into(),
             Self::FineStop => "propeller.pitch_control.turn_min_deg".into(),
             Self::CoarseStop => "propeller.pitch_control.turn_max_deg".into(),
+            Self::Blockage => "propeller.blockage".into(),
             Self::Station(i, measure) => format!("propeller.stations[{i}].{}", measure.key()),
             Self::Point(i, figure) => format!("flight_points[{i}].{}", figure.key(job, i)),
             Self::Elements => "method.elements".into(),
@@ -120,6 +125,7 @@ impl Field {
             (Self::GovernedRpm, PitchControl::ConstantSpeed { rpm, .. }) => Some(*rpm),
             (Self::FineStop, PitchControl::ConstantSpeed { turn_min_deg, .. }) => Some(*turn_min_deg),
             (Self::CoarseStop, PitchControl::ConstantSpeed { turn_max_deg, .. }) => Some(*turn_max_deg),
+            (Self::Blockage, _) => p.blockage,
             (Self::Station(i, measure), _) => drawn.get(i).and_then(|d| measure.of(d)),
             (Self::Point(i, figure), _) => figure.value(job, i),
             (Self::Elements, _) => Some(f64::from(job.method.elements)),
@@ -173,6 +179,7 @@ impl Field {
             (Self::GovernedRpm, PitchControl::ConstantSpeed { rpm, .. }) => *rpm = value,
             (Self::FineStop, PitchControl::ConstantSpeed { turn_min_deg, .. }) => *turn_min_deg = value,
             (Self::CoarseStop, PitchControl::ConstantSpeed { turn_max_deg, .. }) => *turn_max_deg = value,
+            (Self::Blockage, _) => p.blockage = Some(value),
             (Self::Station(i, measure), _) => return write_station(job, i, measure, value),
             (Self::Point(i, figure), _) => return figure.write(job, i, value),
             (Self::Elements, _) => job.method.elements = whole(value),
@@ -188,6 +195,10 @@ impl Field {
         match self {
             Self::Point(i, PointFigure::Airspeed) => {
                 job.flight_points.get_mut(i).map(|p| p.airspeed_m_s = None).is_some()
+            }
+            Self::Blockage => {
+                job.propeller.blockage = None;
+                true
             }
             Self::Aircraft(figure) => figure.clear(job),
             Self::Engine(figure) => figure.clear(job),

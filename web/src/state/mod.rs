@@ -19,6 +19,7 @@ mod tests_machine;
 
 use std::rc::Rc;
 
+use spokeshave::fit::Along;
 use spokeshave::job::{DEMOS, Job};
 
 pub use action::Action;
@@ -29,7 +30,7 @@ pub use field::Field;
 pub use history::History;
 pub use machine::{
     AircraftChoice, AircraftFigure, AircraftKind, AltitudeKind, DragBy, EngineChoice, EngineFigure,
-    EngineKind,
+    EngineKind, FuelBy,
 };
 pub use measure::Measure;
 pub use notice::Notice;
@@ -74,6 +75,8 @@ pub struct State {
     pub units: Units,
     /// Whether the user picked the units.
     pub units_picked: bool,
+    /// What the departure map follows.
+    pub along: Along,
     /// Colours.
     pub theme: Theme,
     /// Something to say.
@@ -99,6 +102,7 @@ impl State {
             follow: 1,
             units,
             units_picked: false,
+            along: Along::default(),
             theme: Theme::default(),
             notice: None,
             filed: None,
@@ -164,6 +168,7 @@ impl State {
             Action::Demo(i) => self.start_from(DEMOS.get(i).map_or(BLANK, |d| d.json), "open an example"),
             Action::Blank => self.start_from(BLANK, "start a new job"),
             Action::Units(units) => self.pick_units(units),
+            Action::Along(along) => self.along = along,
             Action::Theme(theme) => self.theme = theme,
             Action::Say(notice) => self.notice = Some(notice),
             Action::Dismiss => self.notice = None,

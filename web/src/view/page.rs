@@ -157,6 +157,7 @@ fn same_settings(a: &State, b: &State) -> bool {
         && p.rotation == q.rotation
         && p.pitch_control == q.pitch_control
         && p.angle_reference == q.angle_reference
+        && p.blockage == q.blockage
         && a.job().sections == b.job().sections
         && sections(a) == sections(b)
         && a.drafts == b.drafts

@@ -3,6 +3,7 @@
 use std::rc::Rc;
 
 use spokeshave::drawn::DrawnStation;
+use spokeshave::fit::Along;
 use spokeshave::job::{Rotation, Section};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rotor::DepartureMap;
@@ -10,10 +11,11 @@ use spokeshave::section::library;
 use yew::prelude::*;
 
 use super::chips::{Chips, air_words, sentence};
+use super::form::Pick;
 use super::page::PageProps;
 use super::room::{Room, use_room};
 use super::verdict::Brief;
-use super::{Seen, use_act};
+use super::{Act, Seen, use_act};
 use crate::app::Later;
 use crate::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
@@ -108,6 +110,7 @@ fn no_answer(what: &str) -> Html {
 /// The departure map, or why there is none.
 #[component]
 pub fn MapReading(props: &PageProps) -> Html {
+    let act = use_act();
     let answered = props.now.point.as_ref().as_ref().is_some_and(|r| r.rpm.is_some());
     let map = use_memo(props.later.map.clone(), |map| map.as_ref().clone().map(Rc::new));
     match (*map).clone() {
@@ -115,7 +118,14 @@ pub fn MapReading(props: &PageProps) -> Html {
             html! { <MapFigure state={props.state.part(same_map)} later={props.later.clone()} {map} /> }
         }
         _ => {
-            let words = if answered {
+            let level = props.later.along == Along::Level;
+            let words = if answered && level && props.state.along == Along::Level {
+                html! {
+                    <div class="no-answer">{ along(&act, &props.state) }
+                        { " Nothing is flown level here: that takes an aircraft with a drag that the propeller can meet." }
+                    </div>
+                }
+            } else if answered {
                 html! { <p class="no-answer">{ "Working out the map…" }</p> }
             } else {
                 no_answer("map")
@@ -130,7 +140,20 @@ fn same_map(a: &State, b: &State) -> bool {
     p.diameter_m == q.diameter_m
         && p.hub_diameter_m == q.hub_diameter_m
         && a.job().flight_points == b.job().flight_points
-        && (a.point, a.station, a.units) == (b.point, b.station, b.units)
+        && a.job().aircraft.is_some() == b.job().aircraft.is_some()
+        && (a.point, a.station, a.units, a.along) == (b.point, b.station, b.units, b.along)
+}
+
+/// What the map follows, to pick from; nothing where there is no choice.
+fn along(act: &Act, state: &State) -> Html {
+    const ALL: [(Along, &str); 2] = [(Along::FullThrottle, "full throttle"), (Along::Level, "level flight")];
+    if state.job().aircraft.is_none() && state.along == Along::FullThrottle {
+        return html! {};
+    }
+    let options = ALL.iter().map(|(_, words)| AttrValue::from(*words)).collect::<Vec<_>>();
+    let picked = ALL.iter().position(|(to, _)| *to == state.along);
+    let onpick = act.on(|i: usize| Action::Along(ALL[i.min(1)].0));
+    html! { <Pick label="The map follows" {options} {picked} {onpick} bare=true /> }
 }
 
 #[derive(Properties, PartialEq)]
@@ -151,7 +174,7 @@ fn MapFigure(props: &MapFigureProps) -> Html {
         <div class="map-place">
             <DepartureChart map={props.map.clone()} axis={axis(state)} marks={marks(props)} stations={stations.collect::<Vec<_>>()}
                 selected={state.station} length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
-                note={map_note(props)} radius_figures={narrow} on_station={act.on(Action::SelectStation)}
+                note={map_note(props)} along={along(&act, state)} radius_figures={narrow} on_station={act.on(Action::SelectStation)}
                 on_mark={act.on(Action::SelectPoint)} />
         </div>
     }
@@ -170,21 +193,23 @@ fn marks(props: &MapFigureProps) -> Vec<FlightMark> {
         .collect()
 }
 
-/// What the map was worked out along: full throttle where the rpm follows the speed, else one rpm.
+/// What the map was worked out for, behind the list of what it follows: full throttle where the rpm follows the speed, else one rpm.
 fn map_note(props: &MapFigureProps) -> String {
     let (state, map) = (&props.state, &props.map);
     let (low, high) = map.rpm.iter().fold((f64::INFINITY, 0.0_f64), |(a, b), r| (a.min(*r), b.max(*r)));
-    let held = map.rpm.iter().filter(|r| (**r - high).abs() < 1e-6).count() > 1;
-    let along = if high - low > 0.5 && held {
-        format!("full throttle held to {}", with_unit(state.units, Quantity::Rpm, Some(high)))
-    } else if high - low > 0.5 {
-        "full throttle".to_string()
-    } else {
-        format!("at {}", with_unit(state.units, Quantity::Rpm, Some(high)))
+    let at_most = map.rpm.iter().filter(|r| (**r - high).abs() < 1e-6).count() > 1;
+    let rpm = || with_unit(state.units, Quantity::Rpm, Some(high));
+    let moves = high - low > 0.5;
+    let line = match (props.later.along, moves, state.job().aircraft.is_some()) {
+        (Along::Level, ..) => String::new(),
+        (_, true, _) if at_most => format!(" held to {}", rpm()),
+        (_, true, true) => String::new(),
+        (_, true, false) => "full throttle".into(),
+        (_, false, _) => format!(" at {}", rpm()),
     };
     let air =
         state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
-    format!("{along}{air}; each mark stands at its advance per turn")
+    format!("{line}{air}; each mark stands at its advance per turn")
 }
 
 /// The station selected, in detail.

@@ -1,6 +1,7 @@
 //! `spokeshave map`: departure over speed and radius.
 
 use serde::Serialize;
+use spokeshave::fit::Along;
 use spokeshave::rotor::{DepartureMap, MapCell};
 
 use crate::input::{Format, JobSource, Outcome, PointOf, print, print_csv, print_json};
@@ -18,14 +19,35 @@ pub(crate) struct Args {
     /// Number of radii
     #[arg(long, default_value_t = 12, value_parser = clap::value_parser!(u32).range(1..=1000))]
     radii: u32,
+    /// What the speeds follow
+    #[arg(long, value_enum, default_value_t = Line::FullThrottle)]
+    along: Line,
     #[command(flatten)]
     format: Format,
+}
+
+/// What the speeds follow.
+#[derive(Clone, Copy, Debug, clap::ValueEnum)]
+enum Line {
+    /// Full throttle, or the limit rpm where that is less
+    FullThrottle,
+    /// Level flight at part throttle
+    Level,
+}
+
+impl From<Line> for Along {
+    fn from(line: Line) -> Self {
+        match line {
+            Line::FullThrottle => Self::FullThrottle,
+            Line::Level => Self::Level,
+        }
+    }
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
     let rig = args.source.rig()?;
     let index = args.point.index(&rig)?;
-    let Some(map) = rig.map(index, args.speeds, args.radii) else { return Ok(false) };
+    let Some(map) = rig.map(index, args.along.into(), args.speeds, args.radii) else { return Ok(false) };
     if args.format.json {
         print_json(&Told::new(&rig.job.flight_points[index].name, &map))?;
     } else if args.format.csv {

@@ -53,13 +53,20 @@ impl Frame {
         self.advances_m.last().copied().filter(|a| a.is_finite() && *a > 0.0)
     }
 
-    /// Pixel at which the blade makes an advance per turn (m); `None` past the end of the map.
+    /// Pixel at which the blade makes an advance per turn (m); `None` beyond the ends of the map.
     pub(super) fn x_of_advance(&self, advance_m: f64) -> Option<f64> {
         let (speeds, advances) = (&self.airspeeds_m_s, &self.advances_m);
         let after = advances.iter().position(|a| *a >= advance_m - 1e-9)?;
-        let Some(before) = after.checked_sub(1) else { return Some(self.speed().px(speeds[0])) };
+        let Some(before) = after.checked_sub(1) else {
+            return (advance_m > advances[0] - 1e-6).then(|| self.speed().px(speeds[0]));
+        };
         let share = (advance_m - advances[before]) / (advances[after] - advances[before]);
         Some(self.speed().px(speeds[before] + share * (speeds[after] - speeds[before])))
+    }
+
+    /// Whether the map starts at a greater advance per turn (m) than this.
+    pub(super) fn starts_past(&self, advance_m: f64) -> bool {
+        self.advances_m.first().is_some_and(|first| advance_m < *first)
     }
 
     /// Advance per turn, m, at a pixel.

@@ -17,8 +17,18 @@ struct Placed<'a> {
     index: usize,
     mark: &'a FlightMark,
     x: f64,
-    /// Whether it lies past the right end.
-    past: bool,
+    /// Where it lies.
+    lies: Lies,
+}
+
+/// Where a flight point lies.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+enum Lies {
+    /// Before the left end.
+    Before,
+    On,
+    /// Past the right end.
+    Past,
 }
 
 /// Pixels of the flight points that are on the map.
@@ -65,8 +75,13 @@ pub(super) fn dots(frame: &Frame, props: &DepartureChartProps) -> Html {
 /// Flight points with an answer, from left to right.
 fn placed<'a>(frame: &Frame, marks: &'a [FlightMark]) -> Vec<Placed<'a>> {
     let place = |(index, mark): (usize, &'a FlightMark)| {
-        let x = frame.x_of_advance(mark.advance_m?);
-        Some(Placed { index, mark, x: x.unwrap_or(frame.right), past: x.is_none() })
+        let advance_m = mark.advance_m?;
+        let (x, lies) = match frame.x_of_advance(advance_m) {
+            Some(x) => (x, Lies::On),
+            None if frame.starts_past(advance_m) => (frame.left, Lies::Before),
+            None => (frame.right, Lies::Past),
+        };
+        Some(Placed { index, mark, x, lies })
     };
     let mut placed: Vec<Placed> = marks.iter().enumerate().filter_map(place).collect();
     placed.sort_by(|a, b| a.x.total_cmp(&b.x));
@@ -77,17 +92,21 @@ fn name(placed: &Placed) -> String {
     let name = &placed.mark.name;
     let cut = name.char_indices().nth(LONGEST).map(|(i, _)| format!("{}…", name[..i].trim_end()));
     let shown = cut.unwrap_or_else(|| name.to_string());
-    if placed.past { format!("{shown} ▸") } else { shown }
+    match placed.lies {
+        Lies::Before => format!("◂ {shown}"),
+        Lies::On => shown,
+        Lies::Past => format!("{shown} ▸"),
+    }
 }
 
-/// From the name down to the frame and through it; past the end there is nothing to draw a line at.
+/// From the name down to the frame and through it; beyond the ends there is nothing to draw a line at.
 fn line(frame: &Frame, placed: &Placed, middle: f64, size: f64) -> Html {
     let (x, top) = (px(placed.x), frame.axis.top_px);
     // Straight down where the name stands over the line, slanting where others have pushed it aside.
     let half = 0.5 * size - 6.0;
     let start = placed.x.clamp(middle - half, middle + half);
     let lead = format!("M{} {}L{x} {}", px(start), px(top - 12.0), px(top));
-    if placed.past {
+    if placed.lies != Lies::On {
         return html! { <path class="flight-line" d={lead} /> };
     }
     html! { <path class="flight-line" d={format!("{lead}V{}", px(frame.axis.hub_px))} /> }
@@ -109,6 +128,16 @@ mod tests {
         let placed = placed(&frame, &marks);
         assert_eq!(placed.iter().map(name).collect::<Vec<_>>(), ["Standing start", "Dive ▸"]);
         assert_eq!(places(&frame, &marks), [10.0]);
+    }
+
+    #[test]
+    fn points_before_a_map_that_does_not_begin_at_rest_say_so() {
+        let mut map = super::super::frame::tests::sample();
+        map.airspeeds_m_s.iter_mut().for_each(|v| *v += 20.0);
+        let frame = Frame::new(&map, frame().axis, 10.0, 410.0);
+        let marks = [mark("Standing start", Some(0.0))];
+        let placed = placed(&frame, &marks);
+        assert_eq!((name(&placed[0]), placed[0].x), ("◂ Standing start".into(), 10.0));
     }
 
     #[test]

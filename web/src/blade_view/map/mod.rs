@@ -58,6 +58,9 @@ pub struct DepartureChartProps {
     /// What the map was worked out for, one line.
     #[prop_or_default]
     pub note: AttrValue,
+    /// What the map follows, to pick from.
+    #[prop_or_default]
+    pub along: Html,
     /// Whether the radius axis has its figures here, for want of a blade beside it.
     #[prop_or(false)]
     pub radius_figures: bool,
@@ -89,7 +92,7 @@ pub fn DepartureChart(props: &DepartureChartProps) -> Html {
     let on_radius = nearest_station(&props.stations, &props.on_station);
     let height = props.axis.map_height_px();
     let words = &props.note;
-    let note = html! { <><span class="map-note" title={words.clone()}>{ words }</span><DepartureKey /></> };
+    let note = html! { <><span class="map-note" title={words.clone()}>{ props.along.clone() }{ words }</span><DepartureKey /></> };
     html! {
         <Figure title="Departure over the whole speed range" {note} {table} class="map-figure">
             <div class="map" ref={node}>

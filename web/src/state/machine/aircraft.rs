@@ -27,6 +27,10 @@ pub enum AircraftFigure {
     Engines,
     /// Number of rotors.
     Rotors,
+    /// Rolling friction over weight.
+    RollingFriction,
+    /// Drag area of the parts in the slipstreams.
+    SlipstreamArea,
 }
 
 places! { AircraftFigure, Aircraft, |self, aircraft|
@@ -39,6 +43,8 @@ places! { AircraftFigure, Aircraft, |self, aircraft|
     (Self::Oswald, Aircraft::Aeroplane(a)) => Maybe(a.drag.oswald),
     (Self::GreatestLift, Aircraft::Aeroplane(a)) => Maybe(a.cl_max),
     (Self::Engines, Aircraft::Aeroplane(a)) => Count(a.engines),
+    (Self::RollingFriction, Aircraft::Aeroplane(a)) => Maybe(a.rolling_friction),
+    (Self::SlipstreamArea, Aircraft::Aeroplane(a)) => Maybe(a.slipstream_drag_area_m2),
     (Self::Rotors, Aircraft::Multirotor(m)) => Count(m.rotors),
 }
 
@@ -55,6 +61,12 @@ impl AircraftFigure {
             Self::GreatestLift => ("greatest lift coefficient", "cl_max", Quantity::Coefficient),
             Self::Engines => ("number of engines", "engines", Quantity::Count),
             Self::Rotors => ("number of rotors", "rotors", Quantity::Count),
+            Self::RollingFriction => {
+                ("rolling friction over weight", "rolling_friction", Quantity::Coefficient)
+            }
+            Self::SlipstreamArea => {
+                ("drag area in the slipstream", "slipstream_drag_area_m2", Quantity::Area)
+            }
         }
     }
 

@@ -12,6 +12,10 @@ pub enum EngineFigure {
     CurveRpm(usize),
     /// Shaft power of a row of the full-throttle curve.
     CurvePower(usize),
+    /// Load of a row of the fuel consumption.
+    Load(usize),
+    /// Brake specific fuel consumption of a row.
+    LoadConsumption(usize),
     /// Engine rpm over propeller rpm.
     GearRatio,
     /// Limit of engine rpm.
@@ -75,11 +79,14 @@ impl EngineFigure {
         match self {
             Self::CurveRpm(_) => ("rpm", "rpm", Quantity::Rpm),
             Self::CurvePower(_) => ("power", "power_w", Quantity::Power),
+            Self::Load(_) => ("load", "load", Quantity::Share),
             Self::GearRatio => ("gear ratio", "gear_ratio", Quantity::Ratio),
             Self::LimitRpm => ("limit rpm", "max_rpm", Quantity::Rpm),
             Self::IdleRpm => ("idle rpm", "idle_rpm", Quantity::Rpm),
             Self::HeldTo => ("height up to which power is held", "altitude_law.altitude_m", Quantity::Height),
-            Self::Consumption => ("fuel consumption", "bsfc_kg_per_kwh", Quantity::Consumption),
+            Self::Consumption | Self::LoadConsumption(_) => {
+                ("fuel consumption", "bsfc_kg_per_kwh", Quantity::Consumption)
+            }
             Self::Fuel => ("fuel on board", "fuel_kg", Quantity::Mass),
             Self::SpeedConstant => ("speed constant", "kv_rpm_per_v", Quantity::SpeedConstant),
             Self::Resistance => ("winding resistance", "resistance_ohm", Quantity::Resistance),
@@ -99,10 +106,11 @@ impl EngineFigure {
         }
     }
 
-    /// The row of the full-throttle curve it stands in.
-    fn row(self) -> Option<usize> {
+    /// The table it stands in, as it is called and in the job file, and its row.
+    fn row(self) -> Option<(&'static str, &'static str, usize)> {
         match self {
-            Self::CurveRpm(i) | Self::CurvePower(i) => Some(i),
+            Self::CurveRpm(i) | Self::CurvePower(i) => Some(("the curve", "full_throttle", i)),
+            Self::Load(i) | Self::LoadConsumption(i) => Some(("fuel by load", "bsfc_by_load", i)),
             _ => None,
         }
     }
@@ -111,7 +119,7 @@ impl EngineFigure {
     #[must_use]
     pub fn name(self) -> String {
         let name = self.about().0;
-        self.row().map_or_else(|| name.into(), |i| format!("{name} in row {} of the curve", i + 1))
+        self.row().map_or_else(|| name.into(), |(table, _, i)| format!("{name} in row {} of {table}", i + 1))
     }
 
     /// What it measures.
@@ -122,7 +130,7 @@ impl EngineFigure {
 
     /// Its path in the job file.
     pub(in crate::state) fn path(self) -> String {
-        let row = self.row().map_or_else(String::new, |i| format!("full_throttle[{i}]."));
+        let row = self.row().map_or_else(String::new, |(_, key, i)| format!("{key}[{i}]."));
         format!("engine.{row}{}", self.about().1)
     }
 
@@ -133,6 +141,8 @@ impl EngineFigure {
         match (self, engine) {
             (Self::CurveRpm(i), Engine::Piston(p)) => Some(p.full_throttle.get(i)?.rpm),
             (Self::CurvePower(i), Engine::Piston(p)) => Some(p.full_throttle.get(i)?.power_w),
+            (Self::Load(i), Engine::Piston(p)) => Some(p.bsfc_by_load.get(i)?.load),
+            (Self::LoadConsumption(i), Engine::Piston(p)) => Some(p.bsfc_by_load.get(i)?.bsfc_kg_per_kwh),
             _ => self.read(engine)?.value(),
         }
     }
@@ -145,6 +155,12 @@ impl EngineFigure {
             }
             (Self::CurvePower(i), Some(Engine::Piston(p))) => {
                 p.full_throttle.get_mut(i).map(|row| row.power_w = value).is_some()
+            }
+            (Self::Load(i), Some(Engine::Piston(p))) => {
+                p.bsfc_by_load.get_mut(i).map(|row| row.load = value).is_some()
+            }
+            (Self::LoadConsumption(i), Some(Engine::Piston(p))) => {
+                p.bsfc_by_load.get_mut(i).map(|row| row.bsfc_kg_per_kwh = value).is_some()
             }
             (_, engine) => {
                 let place = engine.as_mut().and_then(|e| self.place(e));

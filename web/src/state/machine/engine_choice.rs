@@ -1,6 +1,8 @@
 //! What is picked of the engine, and the rows of its full-throttle curve that come and go.
 
-use spokeshave::job::{AltitudeLaw, Engine, HeldTo, HeldToKind, Interpolation, Job, Piston, PowerPoint};
+use spokeshave::job::{
+    AltitudeLaw, Engine, HeldTo, HeldToKind, Interpolation, Job, LoadPoint, Piston, PowerPoint,
+};
 
 use super::example_of;
 
@@ -92,6 +94,57 @@ pub enum EngineChoice {
     AddRow(usize),
     /// A row less.
     RemoveRow(usize),
+    /// How fuel consumption is given.
+    FuelBy(FuelBy),
+    /// A row more in the fuel consumption by load, after this one.
+    AddLoad(usize),
+    /// A row less there.
+    RemoveLoad(usize),
+}
+
+/// How fuel consumption is given.
+#[derive(Clone, Copy, Debug, PartialEq, Eq)]
+pub enum FuelBy {
+    /// By one figure.
+    OneFigure,
+    /// By load.
+    Load,
+}
+
+impl FuelBy {
+    /// Every way, in the order shown.
+    pub const ALL: [Self; 2] = [Self::OneFigure, Self::Load];
+
+    /// What it is called.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::OneFigure => "one figure",
+            Self::Load => "by load",
+        }
+    }
+
+    /// The way of an engine.
+    #[must_use]
+    pub fn of(piston: &Piston) -> Self {
+        if piston.bsfc_by_load.is_empty() { Self::OneFigure } else { Self::Load }
+    }
+
+    /// Gives the consumption this way. From one figure come two rows of it; from rows the one at the highest load.
+    fn apply(self, piston: &mut Piston) {
+        const STARTED_KG_PER_KWH: f64 = 0.3;
+        match self {
+            way if way == Self::of(piston) => {}
+            Self::Load => {
+                let bsfc_kg_per_kwh = piston.bsfc_kg_per_kwh.take().unwrap_or(STARTED_KG_PER_KWH);
+                piston.bsfc_by_load = [0.5, 1.0].map(|load| LoadPoint { load, bsfc_kg_per_kwh }).into();
+            }
+            Self::OneFigure => {
+                piston.bsfc_kg_per_kwh = piston.bsfc_by_load.last().map(|row| row.bsfc_kg_per_kwh);
+                piston.bsfc_by_load.clear();
+            }
+        }
+    }
 }
 
 impl EngineChoice {
@@ -103,6 +156,9 @@ impl EngineChoice {
             Self::Altitude(_) => "power at height".into(),
             Self::AddRow(i) => format!("add a row after row {} of the curve", i + 1),
             Self::RemoveRow(i) => format!("remove row {} of the curve", i + 1),
+            Self::FuelBy(_) => "how fuel consumption is given".into(),
+            Self::AddLoad(i) => format!("add a row after row {} of fuel by load", i + 1),
+            Self::RemoveLoad(i) => format!("remove row {} of fuel by load", i + 1),
         }
     }
 
@@ -123,6 +179,11 @@ impl EngineChoice {
             (Self::AddRow(i), Some(Engine::Piston(p))) => return add_row(p, i),
             (Self::RemoveRow(i), Some(Engine::Piston(p))) => {
                 return crate::state::choice::remove(&mut p.full_throttle, i, 2, "A curve needs two rows.");
+            }
+            (Self::FuelBy(way), Some(Engine::Piston(p))) => way.apply(p),
+            (Self::AddLoad(i), Some(Engine::Piston(p))) => return add_load(p, i),
+            (Self::RemoveLoad(i), Some(Engine::Piston(p))) => {
+                return crate::state::choice::remove(&mut p.bsfc_by_load, i, 1, "Fuel by load needs a row.");
             }
             _ => return Err("The job has no such engine.".into()),
         }
@@ -145,6 +206,22 @@ fn add_row(piston: &mut Piston, after: usize) -> Result<(), String> {
         (None, None) => return Err("A curve needs two rows.".into()),
     };
     piston.full_throttle.insert(after + 1, new);
+    Ok(())
+}
+
+/// A row halfway to the next one; after the last one halfway to full load.
+fn add_load(piston: &mut Piston, after: usize) -> Result<(), String> {
+    let rows = &mut piston.bsfc_by_load;
+    let Some(row) = rows.get(after).cloned() else { return Err("There is no such row.".into()) };
+    let next = rows.get(after + 1).cloned().unwrap_or(LoadPoint { load: 1.0, ..row });
+    if next.load <= row.load {
+        return Err("The last row stands at full load: put a row before it.".into());
+    }
+    let new = LoadPoint {
+        load: f64::midpoint(row.load, next.load),
+        bsfc_kg_per_kwh: f64::midpoint(row.bsfc_kg_per_kwh, next.bsfc_kg_per_kwh),
+    };
+    rows.insert(after + 1, new);
     Ok(())
 }
 

@@ -7,7 +7,7 @@ mod place;
 
 pub use aircraft::{AircraftChoice, AircraftFigure, AircraftKind, DragBy};
 pub use engine::EngineFigure;
-pub use engine_choice::{AltitudeKind, EngineChoice, EngineKind};
+pub use engine_choice::{AltitudeKind, EngineChoice, EngineKind, FuelBy};
 
 use spokeshave::job::{DEMOS, Job};
 

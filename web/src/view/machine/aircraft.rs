@@ -8,7 +8,7 @@ use yew::prelude::*;
 
 use super::asked::AskedCharts;
 use super::picks::kinds;
-use super::{labelled, optional};
+use super::{hinted, labelled, optional};
 use crate::number::{figure, fixed, with_unit};
 use crate::state::{AircraftChoice, AircraftFigure, AircraftKind, Choice, DragBy, Field, State};
 use crate::units::{Quantity, Units};
@@ -94,6 +94,8 @@ fn figures(act: &Act, state: &Seen) -> Html {
                 { drag_due_to_lift(act, state, a) }
                 { optional(state, Field::Aircraft(AircraftFigure::GreatestLift)) }
                 { figure(AircraftFigure::Engines) }
+                { hinted(state, Field::Aircraft(AircraftFigure::RollingFriction), "0.04") }
+                { optional(state, Field::Aircraft(AircraftFigure::SlipstreamArea)) }
             </>
         },
     }

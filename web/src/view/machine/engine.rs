@@ -2,17 +2,17 @@
 
 use std::rc::Rc;
 
-use spokeshave::fit::Offer;
 use spokeshave::job::{AltitudeLaw, Engine, Interpolation, Piston, PowerPoint};
 use spokeshave::result::PointResult;
 use yew::prelude::*;
 
 use super::offered::OfferedChart;
 use super::picks::kinds;
-use super::rows::CurveRows;
+use super::rows::{Rows, RowsOf};
 use super::{labelled, optional};
 use crate::number::{fixed, with_unit};
-use crate::state::{AltitudeKind, Choice, EngineChoice, EngineFigure, EngineKind, Field, State};
+use crate::results::Offered;
+use crate::state::{AltitudeKind, Choice, EngineChoice, EngineFigure, EngineKind, Field, FuelBy, State};
 use crate::units::{Quantity, Units};
 use crate::view::{Act, Seen, use_act};
 
@@ -22,7 +22,7 @@ pub struct EnginePanelProps {
     /// The state.
     pub state: Seen,
     /// What the shaft offers and the propeller takes at the flight point selected; may be a frame old.
-    pub offer: Rc<Vec<Offer>>,
+    pub offer: Rc<Offered>,
     /// The flight point selected, worked out; may be a frame old.
     pub point: Rc<Option<PointResult>>,
 }
@@ -80,7 +80,10 @@ pub fn EnginePanel(props: &EnginePanelProps) -> Html {
             </div>
             <div class="machine-readings">
                 { chart(props) }
-                if now == EngineKind::Piston { <CurveRows state={state.clone()} /> }
+                if now == EngineKind::Piston {
+                    <Rows state={state.clone()} of={RowsOf::FullThrottle} />
+                    <Rows state={state.clone()} of={RowsOf::FuelByLoad} />
+                }
             </div>
         </div>
     }
@@ -114,7 +117,10 @@ fn piston(act: &Act, state: &Seen, p: &Piston) -> Html {
                 Choice::Engine(EngineChoice::Altitude(to))
             }) }
             if let AltitudeLaw::HeldTo(_) = p.altitude_law { { box_of(EngineFigure::HeldTo) } }
-            { maybe(EngineFigure::Consumption) }
+            { kinds(act, "Fuel consumption by", &FuelBy::ALL, FuelBy::words, FuelBy::of(p), |way| {
+                Choice::Engine(EngineChoice::FuelBy(way))
+            }) }
+            if FuelBy::of(p) == FuelBy::OneFigure { { maybe(EngineFigure::Consumption) } }
             { maybe(EngineFigure::Fuel) }
         </>
     }

@@ -24,6 +24,11 @@ fn labelled(state: &Seen, field: Field) -> Html {
 
 /// The same for a figure the job may go without.
 fn optional(state: &Seen, field: Field) -> Html {
+    hinted(state, field, "none")
+}
+
+/// The same with what holds in its absence.
+fn hinted(state: &Seen, field: Field, hint: &'static str) -> Html {
     let label = capital(&field.name(state.job()));
-    html! { <Labelled shown={Shown::of(state, &[], field)} {label} hint="none" /> }
+    html! { <Labelled shown={Shown::of(state, &[], field)} {label} {hint} /> }
 }

@@ -4,11 +4,12 @@ use std::rc::Rc;
 
 use spokeshave::fit::Offer;
 use spokeshave::job::FlightPoint;
-use spokeshave::result::PointResult;
+use spokeshave::result::{Crossing, PointResult};
 use yew::prelude::*;
 
 use crate::chart::line::{Axis, LineChart, Point, Series, Span, SpanKind, Stroke};
 use crate::number::with_unit;
+use crate::results::Offered;
 use crate::units::{Quantity, Units};
 use crate::view::chips::air_words;
 
@@ -20,7 +21,7 @@ const PAST: f64 = 1.04;
 /// Properties of [`OfferedChart`].
 #[derive(Properties, PartialEq)]
 pub(super) struct OfferedChartProps {
-    pub(super) offer: Rc<Vec<Offer>>,
+    pub(super) offer: Rc<Offered>,
     pub(super) result: Rc<Option<PointResult>>,
     pub(super) point: FlightPoint,
     pub(super) limit_rpm: Option<f64>,
@@ -30,7 +31,7 @@ pub(super) struct OfferedChartProps {
 /// The chart; nothing until the curves have been worked out.
 #[component]
 pub(super) fn OfferedChart(props: &OfferedChartProps) -> Html {
-    let (offer, point) = (&props.offer, &props.point);
+    let (offer, point) = (&props.offer.curve, &props.point);
     let (Some(first), Some(last)) = (offer.first(), offer.last()) else {
         return html! { <div class="chart-waiting" aria-busy="true"></div> };
     };
@@ -47,11 +48,58 @@ pub(super) fn OfferedChart(props: &OfferedChartProps) -> Html {
         span: Some((0.0, ROOM * most.max(1.0))),
     };
     let title = format!("Full throttle and the propeller{}", air_words(props.units, point));
-    html! { <LineChart {title} {x} {y} series={series(props)} points={meeting(props)} spans={limit(props, highest)} height={260.0} /> }
+    let points: Vec<Point> = others(props).into_iter().chain(meeting(props)).collect();
+    html! {
+        <>
+            <LineChart {title} {x} {y} series={series(props)} {points} spans={limit(props, highest)} height={260.0} />
+            if let Some(words) = several(props) { <p class="note">{ words }</p> }
+        </>
+    }
+}
+
+/// Every place at which the curves cross, with its engine rpm, where they do so more than once.
+fn crossings(props: &OfferedChartProps) -> Vec<(f64, &Crossing)> {
+    let gear = props.offer.curve.first().map_or(1.0, |o| o.engine_rpm / o.propeller_rpm);
+    let all = &props.offer.crossings;
+    if all.len() < 2 { Vec::new() } else { all.iter().map(|c| (c.rpm * gear, c)).collect() }
+}
+
+/// Marks where the curves cross away from what counts.
+fn others(props: &OfferedChartProps) -> Vec<Point> {
+    let mark = |(rpm, c): (f64, &Crossing)| {
+        let words = format!("{} {}", steadiness(c), with_unit(props.units, Quantity::Rpm, Some(rpm)));
+        let offered_w = props.offer.curve.windows(2).find(|w| w[1].engine_rpm >= rpm).map(|w| {
+            let share = (rpm - w[0].engine_rpm) / (w[1].engine_rpm - w[0].engine_rpm);
+            w[0].offered_w + share * (w[1].offered_w - w[0].offered_w)
+        })?;
+        Some(Point { at: [rpm, offered_w], words: words.into(), class: None, strong: false })
+    };
+    crossings(props).into_iter().filter(|(_, c)| !c.chosen).filter_map(mark).collect()
+}
+
+fn steadiness(c: &Crossing) -> &'static str {
+    if c.stable { "steady" } else { "not steady" }
+}
+
+/// What it means that the curves cross more than once.
+fn several(props: &OfferedChartProps) -> Option<String> {
+    let all = crossings(props);
+    let rpm = |rpm| with_unit(props.units, Quantity::Rpm, Some(rpm));
+    let places: Vec<String> = all.iter().map(|(at, c)| format!("{} ({})", rpm(*at), steadiness(c))).collect();
+    let chosen = all.iter().find(|(_, c)| c.chosen).map_or_else(
+        || "None of the steady ones lies within the limit.".to_string(),
+        |(at, _)| format!("The highest steady one counts: {}.", rpm(*at)),
+    );
+    (!all.is_empty()).then(|| {
+        format!(
+            "At full throttle engine and propeller agree at {}. Where the propeller's demand rises through the offer the rpm holds itself;              elsewhere it runs away to a steady one. {chosen}",
+            places.join(", ")
+        )
+    })
 }
 
 fn series(props: &OfferedChartProps) -> Vec<Series> {
-    let (offer, point) = (&props.offer, &props.point);
+    let (offer, point) = (&props.offer.curve, &props.point);
     let curve = |name: String, stroke, of: fn(&Offer) -> f64| Series {
         name: name.into(),
         points: offer.iter().map(|o| [o.engine_rpm, of(o)]).collect(),
