@@ -153,7 +153,13 @@ impl Blade {
     /// Angle (rad) from the flat face up to the chord line at a radius (m); `None` where there is no flat face.
     #[must_use]
     pub fn face_to_chord_rad(&self, radius_m: f64) -> Option<f64> {
-        let (mix, t) = (self.section(radius_m), self.thickness.at(radius_m));
+        self.face_to_chord_of(radius_m, self.thickness.at(radius_m))
+    }
+
+    /// The same for another thickness ratio of the section there.
+    #[must_use]
+    pub fn face_to_chord_of(&self, radius_m: f64, thickness_ratio: f64) -> Option<f64> {
+        let (mix, t) = (self.section(radius_m), thickness_ratio);
         let inner = self.families[mix.inner].face_angle_rad(t)?;
         let outer = self.families[mix.outer].face_angle_rad(t)?;
         Some(inner + mix.share * (outer - inner))

@@ -8,6 +8,7 @@
 pub mod air;
 pub mod aircraft;
 pub mod blade;
+pub mod carved;
 pub mod curve;
 pub mod drawn;
 pub mod engine;
@@ -19,4 +20,5 @@ pub mod rig;
 pub mod rotor;
 pub mod section;
 pub mod shape;
+pub mod sheet;
 pub mod wood;

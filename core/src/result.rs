@@ -3,11 +3,16 @@
 
 use serde::Serialize;
 
+mod carved;
 mod chart;
 mod fit;
 mod shape;
 mod strength;
 
+pub use carved::{
+    Carved, CarvedBlade, CarvedPoint, CarvedStation, Doubt, Known, LoadOf, MassOf, OncePerTurn, PlannedBlade,
+    PlannedStation, Read, RemovalPlan, StaticBalance, StationDeparture,
+};
 pub use chart::{ChartCell, Cost, ErrorCosts, Figure, Limit, Margin, PitchDiameter, Tolerance};
 pub use fit::{
     Ceilings, Crossing, Envelope, EnvelopePoint, Fit, FullThrottle, HeldAtLimit, Level, Mark, Marks,

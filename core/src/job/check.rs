@@ -9,10 +9,14 @@ use super::error::{Problem, VERSION};
 use super::found::Found;
 use crate::air::{HIGHEST_M, LARGEST_OFFSET_K, LOWEST_M};
 use crate::section::{check_polars, library};
+use carved::check_carved;
 use engine::{check_electric, check_piston};
+use logbook::check_logbook;
 use wood::check_wood;
 
+mod carved;
 mod engine;
+mod logbook;
 mod wood;
 
 const MOST_STATIONS: usize = 200;
@@ -43,6 +47,12 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
     found.range("method.n_crit".into(), job.method.n_crit, 1.0..=14.0, "");
     if let Some(wood) = &job.wood {
         check_wood(&mut found, wood, &job.propeller);
+    }
+    if let Some(carved) = &job.carved {
+        check_carved(&mut found, job, carved);
+    }
+    if let Some(logbook) = &job.logbook {
+        check_logbook(&mut found, logbook);
     }
     found.0
 }

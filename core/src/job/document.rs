@@ -4,16 +4,20 @@
 //! computed.
 
 mod aircraft;
+mod carved;
 mod engine;
 mod flight_point;
+mod logbook;
 mod propeller;
 mod wood;
 
 pub use aircraft::{Aeroplane, Aircraft, Drag, Multirotor};
+pub use carved::{BladeReading, Carved, CarvedBlade};
 pub use engine::{
     AltitudeLaw, Battery, Electric, Engine, HeldTo, HeldToKind, Interpolation, LoadPoint, Piston, PowerPoint,
 };
 pub use flight_point::{FlightPoint, Setting};
+pub use logbook::{Factors, LogReading, Logbook, Widths};
 pub use propeller::{AngleReference, PitchControl, Propeller, Rotation, Station};
 pub use wood::{Hub, OwnMaterial, Species, StressLimits, USUAL_SPECIES, Wood};
 
@@ -47,6 +51,12 @@ pub struct Job {
     /// What the blade is made of.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub wood: Option<Wood>,
+    /// The blades as measured after carving.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub carved: Option<Carved>,
+    /// What was read in ground runs and flights.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub logbook: Option<Logbook>,
     /// How it is computed.
     #[serde(default)]
     pub method: Method,

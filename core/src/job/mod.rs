@@ -13,9 +13,10 @@ mod own;
 pub use check::section_name_known;
 pub use demo::{DEMOS, Demo};
 pub use document::{
-    Aeroplane, Aircraft, AltitudeLaw, AngleReference, Battery, Drag, Electric, Engine, FlightPoint, HeldTo,
-    HeldToKind, Hub, Interpolation, Job, LoadPoint, Method, Multirotor, OwnMaterial, Piston, PitchControl,
-    PowerPoint, Propeller, Rotation, Section, Setting, Species, Station, StressLimits, USUAL_SPECIES, Wood,
+    Aeroplane, Aircraft, AltitudeLaw, AngleReference, Battery, BladeReading, Carved, CarvedBlade, Drag,
+    Electric, Engine, Factors, FlightPoint, HeldTo, HeldToKind, Hub, Interpolation, Job, LoadPoint,
+    LogReading, Logbook, Method, Multirotor, OwnMaterial, Piston, PitchControl, PowerPoint, Propeller,
+    Rotation, Section, Setting, Species, Station, StressLimits, USUAL_SPECIES, Widths, Wood,
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 

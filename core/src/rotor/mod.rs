@@ -11,9 +11,11 @@ pub mod element;
 pub mod loss;
 mod map;
 mod sweep;
+mod unequal;
 
 pub use map::{DepartureMap, MapCell, departure_map};
 pub use sweep::{Coefficients, CurvePoint, coefficient_curves, curve_point, thrustless_speed_m_s};
+pub use unequal::BladeLoad;
 
 use std::f64::consts::PI;
 

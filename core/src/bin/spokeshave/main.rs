@@ -5,6 +5,8 @@
 mod airfoils;
 mod analyse;
 mod bench;
+mod briefs;
+mod carved;
 mod fit;
 mod import;
 mod input;
@@ -36,6 +38,7 @@ const EXAMPLES: &str = "Examples:
   spokeshave shape JOB.json twist --point Cruise   angles that put every station at its best lift-to-drag
   spokeshave shape JOB.json least-loss --point Cruise --job > NEW.json    least induced loss, as a job of its own
   spokeshave bench JOB.json strength               weight and balance of the blade in its wood
+  spokeshave carved JOB.json --readings READINGS.csv    the blades as measured, and what to take off
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
@@ -57,6 +60,8 @@ enum Command {
     Shape(shape::Args),
     /// Will it hold: weight and strength of the blade
     Bench(bench::Args),
+    /// The blades as carved: differences, what they do, what can be put right
+    Carved(carved::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),
     /// Departure over speed and radius at a flight point's air
@@ -81,6 +86,7 @@ fn main() -> ExitCode {
         Command::Fit(args) => fit::run(&args),
         Command::Shape(args) => shape::run(&args),
         Command::Bench(args) => bench::run(&args),
+        Command::Carved(args) => carved::run(&args),
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),

@@ -7,11 +7,11 @@ mod twist;
 use clap::Subcommand;
 use serde::Serialize;
 use spokeshave::job::Job;
-use spokeshave::result::{Brief, Compared};
+use spokeshave::result::Compared;
 use spokeshave::shape::{ShapeError, Shaped};
 
+use crate::briefs::briefs;
 use crate::input::{JobSource, Outcome, print, print_json};
-use crate::table::{figure, table};
 
 /// Strength is not judged by any of these commands; see to it by a proven practice or a calculation before such a blade is run.
 #[derive(clap::Args)]
@@ -92,27 +92,5 @@ fn variant(mut job: Job, suffix: &str) -> Job {
 
 /// Flight points with the drawn and with the shaped blade.
 fn compared(points: &[Compared]) -> String {
-    let header =
-        ["flight point", "blade", "km/h", "rpm", "thrust N", "power kW", "efficiency", "climb m/s", ""];
-    let rows = points.iter().flat_map(|c| [row(&c.drawn, "drawn"), row(&c.shaped, "shaped")]);
-    table(&header, rows.collect())
-}
-
-fn row(b: &Brief, blade: &str) -> Vec<String> {
-    let words = match (b.held_at_limit, b.rpm) {
-        (true, _) => "throttled back to the limit rpm",
-        (false, None) => b.state.sentence(),
-        (false, Some(_)) => "",
-    };
-    vec![
-        b.name.clone(),
-        blade.into(),
-        figure(b.airspeed_m_s.map(|v| 3.6 * v), 1),
-        figure(b.rpm, 0),
-        figure(b.thrust_n, 1),
-        figure(b.power_w.map(|p| p / 1e3), 3),
-        figure(b.efficiency, 4),
-        figure(b.rate_of_climb_m_s, 2),
-        words.into(),
-    ]
+    briefs(points.iter().flat_map(|c| [(&c.drawn, "drawn"), (&c.shaped, "shaped")]))
 }

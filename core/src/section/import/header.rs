@@ -1,6 +1,7 @@
 //! Column headings: a quantity and its unit, as in `alpha_deg`, `alpha [deg]`, `Alpha (°)`, `t/c [%]`, `Re`.
 
 use super::error::ImportError;
+use crate::sheet::heading_parts;
 
 /// What a column holds.
 #[derive(Debug, Clone, Copy, PartialEq, Eq)]
@@ -111,7 +112,7 @@ impl Header {
     }
 
     fn join(&mut self, line: u64, index: usize, heading: &str) -> Result<(), ImportError> {
-        let (quantity, unit) = parts(heading);
+        let (quantity, unit) = heading_parts(heading, Quantity::of);
         let Some(quantity) = quantity else {
             if !heading.is_empty() {
                 self.unused.push(heading.chars().take(40).collect());
@@ -129,22 +130,5 @@ impl Header {
         };
         self.columns[quantity as usize] = Some(Column { index, scale });
         Ok(())
-    }
-}
-
-/// The quantity and the unit of a heading, the unit behind it in brackets or after an underscore or a blank.
-fn parts(heading: &str) -> (Option<Quantity>, String) {
-    let plain = heading.trim().to_lowercase();
-    let (name, unit) = match plain.split_once(['[', '(']) {
-        Some((name, unit)) => (name.trim(), unit.trim_end_matches([']', ')']).trim()),
-        None => (plain.as_str(), ""),
-    };
-    let joined = name.replace([' ', '-'], "_");
-    if let Some(quantity) = Quantity::of(&joined) {
-        return (Some(quantity), unit.to_string());
-    }
-    match joined.rsplit_once('_') {
-        Some((name, tail)) if unit.is_empty() => (Quantity::of(name), tail.to_string()),
-        _ => (None, String::new()),
     }
 }

@@ -16,6 +16,7 @@ pub use error::{ImportError, MOST_BYTES};
 
 use super::polar::{TableError, check_polars};
 use super::table::Table;
+use crate::sheet::{records, separator};
 use header::{Header, Quantity};
 use rows::{Gathered, Reader, gather};
 
@@ -48,7 +49,7 @@ pub fn read(text: &str, from: &str) -> Result<Imported, ImportError> {
     let text = text.trim_start_matches('\u{feff}');
     let first = text.lines().find(|l| !l.trim().is_empty() && !l.starts_with('#'));
     let separator = separator(first.ok_or(ImportError::Empty)?);
-    let records = records(text, separator)?;
+    let records = records(text, separator).map_err(|(line, message)| ImportError::Text { line, message })?;
     let mut lines = records.iter().filter(|(_, cells)| cells.iter().any(|c| !c.is_empty()));
     let (line, headings) = lines.next().ok_or(ImportError::Empty)?;
     let header = Header::read(*line, &headings.iter().collect::<Vec<_>>())?;
@@ -66,30 +67,6 @@ pub fn read(text: &str, from: &str) -> Result<Imported, ImportError> {
         polars,
     };
     Ok(Imported { table, rows: rows.len(), unused: header.unused })
-}
-
-/// The separator of the headings: semicolon, else tab, else comma.
-fn separator(headings: &str) -> u8 {
-    [b';', b'\t'].into_iter().find(|s| headings.as_bytes().contains(s)).unwrap_or(b',')
-}
-
-/// The cells of every line, with its number.
-fn records(text: &str, separator: u8) -> Result<Vec<(u64, csv::StringRecord)>, ImportError> {
-    let mut reader = csv::ReaderBuilder::new()
-        .delimiter(separator)
-        .comment(Some(b'#'))
-        .flexible(true)
-        .has_headers(false)
-        .trim(csv::Trim::All)
-        .from_reader(text.as_bytes());
-    let line = |position: Option<&csv::Position>| position.map_or(1, csv::Position::line);
-    reader
-        .records()
-        .map(|record| match record {
-            Ok(record) => Ok((line(record.position()), record)),
-            Err(e) => Err(ImportError::Text { line: line(e.position()), message: e.to_string() }),
-        })
-        .collect()
 }
 
 /// The polars of a section, once they hold together.

@@ -96,6 +96,12 @@ impl Outline {
         &self.points
     }
 
+    /// The upper side from the nose to the trailing edge, in chords.
+    #[must_use]
+    pub fn upper_side(&self) -> Vec<[f64; 2]> {
+        measure::sides(&self.points).0
+    }
+
     /// Angle by which the chord line is nose up from the axis the list was drawn on, radians.
     #[must_use]
     pub fn rotation_rad(&self) -> f64 {

@@ -1,0 +1,91 @@
+//! `spokeshave carved`: the blades as measured, and what can be put right.
+
+mod print;
+
+use std::path::PathBuf;
+
+use serde::Serialize;
+use spokeshave::carved::{self, CarvedError, import};
+use spokeshave::job::Job;
+use spokeshave::result::{Carved, RemovalPlan};
+use spokeshave::rig::Rig;
+use spokeshave::sheet;
+
+use crate::input::{Format, JobSource, Outcome, Stop, point_index, print, print_csv, print_json, read};
+
+#[derive(clap::Args)]
+#[command(
+    after_help = "READINGS is a sheet with headings: blade, radius_mm (or station, the share of the tip radius), face angle or
+chord-line angle or angle (degrees, or degrees and minutes as in 18 30), chord_mm, thickness_mm, track_mm. Anything but the
+place may be missing; between readings the difference from the drawing is interpolated. Wood only comes off: the plan never
+asks for adding any.
+
+Example:
+  spokeshave carved JOB.json --readings READINGS.csv --point Cruise"
+)]
+pub(crate) struct Args {
+    #[command(flatten)]
+    source: JobSource,
+    /// Readings in place of those of the job file; - reads standard input
+    #[arg(long, value_name = "READINGS")]
+    readings: Option<PathBuf>,
+    /// The flight point at which departure is to be restored; without it the first in flight
+    #[arg(long)]
+    point: Option<String>,
+    #[command(flatten)]
+    format: Format,
+    /// The whole job with the readings in it, as a job file
+    #[arg(id = "as_job", long = "job", conflicts_with_all = ["json", "csv"])]
+    job: bool,
+}
+
+#[derive(Serialize)]
+struct Both<'a> {
+    carved: &'a Carved,
+    plan: Option<&'a RemovalPlan>,
+}
+
+pub(crate) fn run(args: &Args) -> Outcome {
+    let rig = with_readings(args.source.rig()?, args.readings.as_ref())?;
+    if args.job {
+        print(&rig.job.to_json())?;
+        return Ok(true);
+    }
+    let point = match &args.point {
+        Some(name) => point_index(&rig, Some(name))?,
+        None => carved::usual_point(&rig),
+    };
+    let found = carved::analyse(&rig).map_err(Stop::bad)?;
+    let plan = match carved::plan(&rig, point) {
+        Ok(plan) => Some(plan),
+        Err(e @ CarvedError::NoAnswer(_)) => {
+            eprintln!("spokeshave: no plan: {e}");
+            None
+        }
+        Err(e) => return Err(Stop::bad(e)),
+    };
+    if args.format.json {
+        print_json(&Both { carved: &found, plan: plan.as_ref() })?;
+    } else if args.format.csv {
+        print_csv(&print::CSV_HEADER, print::csv_rows(&found, plan.as_ref()).into_iter())?;
+    } else {
+        print(&print::text(&found, plan.as_ref()))?;
+    }
+    Ok(plan.is_some())
+}
+
+fn with_readings(rig: Rig, path: Option<&PathBuf>) -> Result<Rig, Stop> {
+    let Some(path) = path else { return Ok(rig) };
+    let text = read(path, sheet::MOST_BYTES, "a sheet of readings")?;
+    let bad = |e: &dyn std::fmt::Display| Stop::BadInput(format!("{}: {e}", path.display()));
+    let (carved, unused) =
+        import::read(&text, &rig.job.propeller, rig.job.carved.as_ref()).map_err(|e| bad(&e))?;
+    for column in unused {
+        eprintln!("spokeshave: column {column:?} is not used");
+    }
+    let job = Job { carved: Some(carved), ..rig.job };
+    match job.check().as_slice() {
+        [] => Rig::new(&job).map_err(Stop::bad),
+        [problem, ..] => Err(bad(problem)),
+    }
+}

@@ -1,0 +1,47 @@
+//! Static balance of unequal blades.
+
+use std::f64::consts::TAU;
+
+use super::CarvedError;
+use crate::job::Carved;
+use crate::result::{MassOf, StaticBalance};
+use crate::rig::Rig;
+use crate::wood::{self, BladeBeam};
+
+/// The resultant of what each blade contributes in its own direction, evenly spaced round the hub.
+pub(super) fn resultant(of: &[f64]) -> (f64, f64) {
+    let n = of.len() as f64;
+    let turned = |(b, value): (usize, &f64)| {
+        let angle = TAU * b as f64 / n;
+        (value * angle.cos(), value * angle.sin())
+    };
+    of.iter().enumerate().map(turned).fold((0.0, 0.0), |sum, v| (sum.0 + v.0, sum.1 + v.1))
+}
+
+/// Static balance of the blades, hub taken as balanced: the mass moment `∫ ρ A r dr` of each from the hub out, by the
+/// outlines of its sections and the density of the readings, else of the job's wood, else of the usual one.
+pub(super) fn balance(rig: &Rig, carved: &Carved, blades: &[Rig]) -> Result<StaticBalance, CarvedError> {
+    let usual = wood::material(&rig.job.wood.clone().unwrap_or_default())?.density_kg_m3;
+    let density = carved.density_kg_m3.unwrap_or(usual);
+    let mass = |blade: &Rig| -> Result<MassOf, CarvedError> {
+        let (mass, share) = (wood::mass(&BladeBeam::new(blade)?), density / usual);
+        Ok(MassOf { mass_kg: share * mass.blade_kg, moment_kg_m: share * mass.static_moment_kg_m })
+    };
+    let masses = blades.iter().map(mass).collect::<Result<Vec<MassOf>, CarvedError>>()?;
+    let moments: Vec<f64> = masses.iter().map(|m| m.moment_kg_m).collect();
+    let (x, y) = resultant(&moments);
+    let unbalance_kg_m = x.hypot(y);
+    let along = |b: usize| {
+        let angle = TAU * b as f64 / moments.len() as f64;
+        x * angle.cos() + y * angle.sin()
+    };
+    let heavy = (0..moments.len()).max_by(|a, b| along(*a).total_cmp(&along(*b))).unwrap_or(0);
+    Ok(StaticBalance {
+        density_kg_m3: density,
+        density_given: carved.density_kg_m3.is_some() || rig.job.wood.is_some(),
+        blades: masses,
+        unbalance_kg_m,
+        heavy_blade: (unbalance_kg_m > 1e-9).then_some(heavy + 1),
+        grams_at_tip: 1e3 * unbalance_kg_m / rig.rotor.blade.radius_m,
+    })
+}

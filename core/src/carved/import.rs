@@ -1,0 +1,150 @@
+//! Readings of carved blades as a sheet: `blade`, `radius` (or `station`, the share of the tip radius), `angle` (or
+//! `face angle`, `chord-line angle`), `chord`, `thickness`, `track`; units in the headings, all but the place may be
+//! missing. An angle may be in degrees and minutes.
+
+use crate::job::{AngleReference, BladeReading, Carved, CarvedBlade, Propeller};
+use crate::sheet::{Quantity, Row, Sheet, SheetError};
+
+const LENGTH: &[(&str, f64, f64)] =
+    &[("m", 1.0, 0.0), ("mm", 1e-3, 0.0), ("cm", 1e-2, 0.0), ("in", 0.0254, 0.0), ("inch", 0.0254, 0.0)];
+const ANGLE: &[(&str, f64, f64)] =
+    &[("deg", 1.0, 0.0), ("°", 1.0, 0.0), ("degrees", 1.0, 0.0), ("deg_min", 1.0, 0.0), ("", 1.0, 0.0)];
+const SHARE: &[(&str, f64, f64)] = &[("", 1.0, 0.0), ("%", 0.01, 0.0), ("percent", 0.01, 0.0)];
+
+const QUANTITIES: [Quantity; 9] = [
+    Quantity {
+        name: "blade",
+        names: &["blade", "blade_number"],
+        units: &[("", 1.0, 0.0)],
+        allowed: 1.0..=12.0,
+    },
+    Quantity { name: "radius", names: &["radius", "r"], units: LENGTH, allowed: 1e-4..=6.0 },
+    Quantity {
+        name: "station",
+        names: &["station", "radius_fraction", "r/r"],
+        units: SHARE,
+        allowed: 0.001..=1.0,
+    },
+    Quantity { name: "angle", names: &["angle", "blade_angle"], units: ANGLE, allowed: -90.0..=90.0 },
+    Quantity { name: "face angle", names: &["face_angle"], units: ANGLE, allowed: -90.0..=90.0 },
+    Quantity { name: "chord-line angle", names: &["chord_line_angle"], units: ANGLE, allowed: -90.0..=90.0 },
+    Quantity { name: "chord", names: &["chord"], units: LENGTH, allowed: 1e-4..=3.0 },
+    Quantity { name: "thickness", names: &["thickness"], units: LENGTH, allowed: 1e-5..=1.0 },
+    Quantity { name: "track", names: &["track"], units: LENGTH, allowed: -0.2..=0.2 },
+];
+
+/// The readings of a sheet, and the headings that were not used. What the angles were read on is what the heading says,
+/// else what the propeller is measured by; limits and density are those of `before`, where there is one.
+///
+/// # Errors
+/// [`SheetError`] with line, column, what stands there, what is allowed and what may have happened.
+///
+/// ```
+/// use spokeshave::{carved::import, job::{DEMOS, Job}};
+/// let job = Job::from_json(DEMOS[0].json).unwrap();
+/// let text = "blade,radius_mm,face angle,chord_mm\n1,540,18 30,75\n2,540,19.1,\n";
+/// let (carved, _) = import::read(text, &job.propeller, None)?;
+/// assert_eq!(carved.blades[0].readings[0].angle_deg, Some(18.5));
+/// # Ok::<(), spokeshave::sheet::SheetError>(())
+/// ```
+pub fn read(text: &str, p: &Propeller, before: Option<&Carved>) -> Result<(Carved, Vec<String>), SheetError> {
+    let sheet = Sheet::read(text, &QUANTITIES)?;
+    if !sheet.has("radius") && !sheet.has("station") {
+        return Err(sheet.without("radius_mm or station"));
+    }
+    let named: Vec<&str> =
+        ["angle", "face angle", "chord-line angle"].into_iter().filter(|name| sheet.has(name)).collect();
+    if named.len() > 1 {
+        return Err(SheetError {
+            line: sheet.header_line,
+            column: None,
+            message: format!("columns {}; one of them is enough", named.join(" and ")),
+        });
+    }
+    let angle = named.first().copied().unwrap_or("angle");
+    let mut blades = vec![CarvedBlade::default(); 1];
+    for row in sheet.rows() {
+        let (blade, reading) = one(&sheet, row, angle, p)?;
+        if blade > p.blades as usize {
+            return Err(sheet.refused(row, "blade", &format!("1 to {}, the blades of the job", p.blades)));
+        }
+        if blades.len() < blade {
+            blades.resize(blade, CarvedBlade::default());
+        }
+        put(&sheet, row, &mut blades[blade - 1].readings, reading)?;
+    }
+    let angle_reference = match angle {
+        "face angle" => AngleReference::FlatFace,
+        "chord-line angle" => AngleReference::ChordLine,
+        _ => p.angle_reference,
+    };
+    let kept = before.cloned().unwrap_or_default();
+    Ok((Carved { angle_reference, blades, ..kept }, sheet.unused))
+}
+
+fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, BladeReading), SheetError> {
+    let tip_m = 0.5 * p.diameter_m;
+    let radius = sheet.figure(row, "radius")?;
+    let share = sheet.figure(row, "station")?;
+    let (name, radius_m) = match (radius, share) {
+        (Some(radius), _) => ("radius", radius),
+        (None, Some(share)) => ("station", share * tip_m),
+        (None, None) => {
+            let name = if sheet.has("radius") { "radius" } else { "station" };
+            return Err(sheet.refused(row, name, "a number: where on the blade it was read"));
+        }
+    };
+    if radius_m > tip_m * (1.0 + 1e-9) {
+        let allowed =
+            format!("up to the tip, {:.1} mm; perhaps the unit in the heading is wrong", 1e3 * tip_m);
+        return Err(sheet.refused(row, name, &allowed));
+    }
+    let blade = sheet.figure(row, "blade")?.unwrap_or(1.0);
+    if blade.fract() != 0.0 {
+        return Err(sheet.refused(row, "blade", "a whole number from 1"));
+    }
+    let reading = BladeReading {
+        radius_m,
+        angle_deg: sheet.figure_by(row, angle, angle_of)?,
+        chord_m: sheet.figure(row, "chord")?,
+        thickness_m: sheet.figure(row, "thickness")?,
+        track_m: sheet.figure(row, "track")?,
+    };
+    if let (Some(chord), Some(thickness)) = (reading.chord_m, reading.thickness_m)
+        && thickness > chord
+    {
+        let allowed = "at most the chord; perhaps chord and thickness are swapped";
+        return Err(sheet.refused(row, "thickness", allowed));
+    }
+    Ok((blade as usize, reading))
+}
+
+/// Puts a reading in its place by radius; a second one at the same place is refused.
+fn put(
+    sheet: &Sheet,
+    row: &Row,
+    readings: &mut Vec<BladeReading>,
+    new: BladeReading,
+) -> Result<(), SheetError> {
+    let at = readings.partition_point(|r| r.radius_m < new.radius_m - 1e-6);
+    if readings.get(at).is_some_and(|r| (r.radius_m - new.radius_m).abs() <= 1e-6) {
+        let name = if sheet.has("radius") { "radius" } else { "station" };
+        return Err(sheet.refused(row, name, "one reading of a blade at a place; this is the second"));
+    }
+    readings.insert(at, new);
+    Ok(())
+}
+
+/// An angle in degrees from text: decimals (`18.5`), or degrees and minutes with a sign between them (`18 30`, `18°30'`,
+/// `18:30`). `None` for anything else.
+#[must_use]
+pub fn angle_of(text: &str) -> Option<f64> {
+    let text = text.trim().trim_end_matches(['\'', '′', '°']).replace(['−', '–'], "-").replace(',', ".");
+    if let Ok(degrees) = text.parse::<f64>() {
+        return degrees.is_finite().then_some(degrees);
+    }
+    let (whole, minutes) = text.split_once(['°', ':', ' '])?;
+    let (degrees, minutes): (i32, f64) = (whole.trim().parse().ok()?, minutes.trim().parse().ok()?);
+    let sign = if whole.trim().starts_with('-') { -1.0 } else { 1.0 };
+    (0.0..60.0).contains(&minutes).then(|| f64::from(degrees) + sign * minutes / 60.0)
+}

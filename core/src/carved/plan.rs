@@ -1,0 +1,270 @@
+//! The removals that best restore departure and even the blades.
+//!
+//! At each radius the wanted angle is the one that gives the drawn blade's departure with the chord and thickness the
+//! plan leaves, in the balance of that element at the flight point's condition as drawn. Within what planing can reach
+//! ([`super::plane`]) each blade takes the angle of least squares both from the wanted one and from the mean of the
+//! blades; chord and thickness likewise, from the drawn ones. Small differences that no plane would set right are left.
+
+use super::CarvedError;
+use super::even::evened;
+use super::load::{Set, analysed};
+use super::measured::{Measured, Size};
+use super::plane::{Cuts, Profile, Slab};
+use crate::fit;
+use crate::job::Setting;
+use crate::report::best_of;
+use crate::result::{PlannedBlade, PlannedStation, RemovalPlan};
+use crate::rig::{Rig, air_of};
+use crate::rotor::Condition;
+
+/// Widest turn of a face that is looked at, rad.
+const WIDEST_RAD: f64 = 0.2;
+/// Halvings of the turn: to less than a millionth of a degree.
+const HALVINGS: u32 = 40;
+/// What is not worth a cut: angle, rad; depth off back or edge, m.
+const LEAST_TURN_RAD: f64 = 0.02 * std::f64::consts::PI / 180.0;
+const LEAST_CUT_M: f64 = 0.1e-3;
+/// Least Prandtl factor at which the wanted angle is solved; nearer to the ends it is the drawn one.
+const LEAST_FACTOR: f64 = 0.35;
+
+/// The flight point a plan is judged at without one named: the first in flight that has an answer, else the first that has one.
+#[must_use]
+pub fn usual_point(rig: &Rig) -> usize {
+    let points = &rig.job.flight_points;
+    let answered = |i: &usize| rig.condition(*i).is_some();
+    let flying = |i: &usize| {
+        points[*i].setting == Setting::Level {} || points[*i].airspeed_m_s.is_none_or(|v| v > 0.0)
+    };
+    let mut all = 0..points.len();
+    all.clone().find(|i| flying(i) && answered(i)).or_else(|| all.find(answered)).unwrap_or(0)
+}
+
+/// What to take off, judged at a flight point, and what comes of it.
+///
+/// # Errors
+/// No readings; no such flight point or none with an answer; readings of a blade that cannot be.
+pub fn plan(rig: &Rig, point: usize) -> Result<RemovalPlan, CarvedError> {
+    let measured = Measured::new(rig)?;
+    let name = rig.job.flight_points.get(point).map_or_else(|| point.to_string(), |p| p.name.clone());
+    let at = rig.job.flight_points.get(point).and_then(|p| fit::condition(rig, p, air_of(p).ok()?).ok());
+    let at = at.ok_or_else(|| CarvedError::NoAnswer(name.clone()))?;
+    let bench = Bench::new(rig, &measured);
+    let drawn: Vec<f64> = measured.radii_m.iter().map(|&r| rig.rotor.blade.cut(r).angle_rad).collect();
+    let first = bench.planned(&drawn);
+    let wanted = wanted(rig, &bench.after(&first), &at)?;
+    let planned = bench.planned(&wanted);
+    let after = bench.after(&planned);
+    let blades = (0..measured.blades.len())
+        .map(|b| PlannedBlade { blade: b + 1, stations: planned.iter().map(|s| s[b].clone()).collect() })
+        .collect();
+    Ok(RemovalPlan { flight_point: name, blades, after: analysed(rig, &after)? })
+}
+
+/// The angle at each radius that gives the drawn departure with the sizes of a plan, rad.
+fn wanted(rig: &Rig, planned: &Measured, at: &Condition) -> Result<Vec<f64>, CarvedError> {
+    let mean = Set::new(rig, planned)?.mean.rotor;
+    let angle = |r: f64| {
+        let as_drawn = rig.rotor.element(&rig.rotor.ring(r), at).0;
+        let (drawn, best) = (as_drawn.balance()?, best_of(&as_drawn)?);
+        let element = mean.element(&mean.ring(r), at).0;
+        let alpha = best_of(&element)?.alpha_rad + drawn.alpha_rad - best.alpha_rad;
+        let balance = element.balance_at(alpha).filter(|b| b.loss > LEAST_FACTOR)?;
+        Some(balance.inflow_rad + alpha - at.turn_rad)
+    };
+    let drawn = |r: f64| rig.rotor.blade.cut(r).angle_rad;
+    Ok(planned.radii_m.iter().map(|&r| angle(r).unwrap_or_else(|| drawn(r))).collect())
+}
+
+/// The blades on the bench.
+struct Bench<'r> {
+    rig: &'r Rig,
+    measured: &'r Measured,
+    profiles: Vec<Option<Profile>>,
+    /// Least chord and thickness at each radius, m.
+    least: Vec<(f64, f64)>,
+}
+
+impl<'r> Bench<'r> {
+    fn new(rig: &'r Rig, measured: &'r Measured) -> Self {
+        let shares =
+            rig.job.carved.as_ref().map_or((1.0, 1.0), |c| (c.least_chord_share, c.least_thickness_share));
+        let blade = &rig.rotor.blade;
+        let least = |&r: &f64| {
+            let cut = blade.cut(r);
+            (shares.0 * cut.chord_m, shares.1 * cut.thickness_ratio * cut.chord_m)
+        };
+        let profile = |&r: &f64| {
+            let cut = blade.cut(r);
+            blade.face_to_chord_rad(r)?;
+            let name = &blade.families[cut.section.inner].about.name;
+            let outline = rig.job.section_outline(name, cut.thickness_ratio.clamp(0.02, 0.55))?;
+            Profile::new(&outline)
+        };
+        let radii = &measured.radii_m;
+        Self {
+            rig,
+            measured,
+            profiles: radii.iter().map(profile).collect(),
+            least: radii.iter().map(least).collect(),
+        }
+    }
+
+    /// The plan at every radius, by blade, for wanted angles to the chord line, rad.
+    fn planned(&self, wanted_rad: &[f64]) -> Vec<Vec<PlannedStation>> {
+        wanted_rad.iter().enumerate().map(|(s, wanted)| self.station(s, *wanted)).collect()
+    }
+
+    /// The blades as a plan leaves them.
+    fn after(&self, planned: &[Vec<PlannedStation>]) -> Measured {
+        let mut after = self.measured.clone();
+        for (b, sizes) in after.blades.iter_mut().enumerate() {
+            for (size, station) in sizes.iter_mut().zip(planned) {
+                let p = &station[b];
+                size.angle_rad = p.angle_deg.to_radians();
+                size.chord_m = p.chord_m;
+                size.thickness_m = p.thickness_m;
+            }
+        }
+        after
+    }
+
+    fn station(&self, s: usize, wanted_rad: f64) -> Vec<PlannedStation> {
+        let pieces: Vec<Piece> = self.measured.blades.iter().map(|blade| self.piece(s, &blade[s])).collect();
+        let cut = self.rig.rotor.blade.cut(self.measured.radii_m[s]);
+        let (drawn_chord, drawn_thickness) = (cut.chord_m, cut.thickness_ratio * cut.chord_m);
+        let mut turns = vec![0.0; pieces.len()];
+        let mut goals: Vec<(f64, f64)> = Vec::new();
+        // The wedge takes chord and thickness, which the next look at both allows for.
+        for _ in 0..3 {
+            let wedged: Vec<Slab> = pieces.iter().zip(&turns).map(|(p, t)| p.turned(*t)).collect();
+            let bound = |least: f64, now: f64| (least.min(now), now);
+            let chords: Vec<_> = wedged.iter().map(|w| bound(self.least[s].0, w.chord_m)).collect();
+            let thick: Vec<_> = wedged.iter().map(|w| bound(self.least[s].1, w.thickness_m)).collect();
+            goals = evened(drawn_chord, &chords).into_iter().zip(evened(drawn_thickness, &thick)).collect();
+            let reach: Vec<(f64, f64)> = pieces.iter().zip(&goals).map(|(p, g)| p.reach(*g)).collect();
+            let angles = evened(wanted_rad, &reach);
+            turns = pieces.iter().zip(&angles).zip(&goals).map(|((p, a), g)| p.turn_to(*a, *g)).collect();
+        }
+        pieces
+            .iter()
+            .zip(&turns)
+            .zip(&goals)
+            .map(|((p, turn), goal)| p.told(*turn, *goal, wanted_rad))
+            .collect()
+    }
+
+    fn piece(&self, s: usize, size: &Size) -> Piece<'_> {
+        let radius_m = self.measured.radii_m[s];
+        let mut piece = Piece {
+            rig: self.rig,
+            radius_m,
+            profile: self.profiles[s].as_ref(),
+            slab: Slab { face_rad: 0.0, chord_m: size.chord_m, thickness_m: size.thickness_m },
+            least: self.least[s],
+        };
+        piece.slab.face_rad = size.angle_rad - piece.face_to_chord(&piece.slab);
+        piece
+    }
+}
+
+/// One blade at one radius.
+struct Piece<'a> {
+    rig: &'a Rig,
+    radius_m: f64,
+    profile: Option<&'a Profile>,
+    slab: Slab,
+    least: (f64, f64),
+}
+
+impl Piece<'_> {
+    fn face_to_chord(&self, slab: &Slab) -> f64 {
+        let ratio = slab.thickness_m / slab.chord_m;
+        self.profile.and_then(|_| self.rig.rotor.blade.face_to_chord_of(self.radius_m, ratio)).unwrap_or(0.0)
+    }
+
+    fn turned(&self, turn_rad: f64) -> Slab {
+        self.cut(&Cuts::turning(self.slab.chord_m, turn_rad))
+    }
+
+    fn cut(&self, cuts: &Cuts) -> Slab {
+        match self.profile {
+            Some(profile) => profile.cut(self.slab, cuts),
+            None => Slab {
+                chord_m: self.slab.chord_m - cuts.trailing_edge_m,
+                thickness_m: self.slab.thickness_m - cuts.back_m,
+                ..self.slab
+            },
+        }
+    }
+
+    /// The cuts of a turn with the chord and thickness aimed at, and what they leave.
+    fn finished(&self, turn_rad: f64, (chord_m, thickness_m): (f64, f64)) -> (Cuts, Slab) {
+        let mut cuts = Cuts::turning(self.slab.chord_m, turn_rad);
+        let wedged = self.cut(&cuts);
+        let worth = |depth: f64| if depth < LEAST_CUT_M { 0.0 } else { depth };
+        cuts.trailing_edge_m = worth(wedged.chord_m - chord_m);
+        cuts.back_m = worth(wedged.thickness_m - thickness_m);
+        (cuts, self.cut(&cuts))
+    }
+
+    /// Angle to the chord line after a turn, rad.
+    fn angle(&self, turn_rad: f64, goal: (f64, f64)) -> f64 {
+        let slab = self.finished(turn_rad, goal).1;
+        slab.face_rad + self.face_to_chord(&slab)
+    }
+
+    /// The farthest turn in a direction within the least chord and thickness.
+    fn farthest(&self, sign: f64) -> f64 {
+        let within = |turn: f64| {
+            let left = self.turned(sign * turn);
+            left.chord_m >= self.least.0 && left.thickness_m >= self.least.1
+        };
+        if self.profile.is_none() || !within(0.0) {
+            return 0.0;
+        }
+        let (mut good, mut bad) = (0.0, WIDEST_RAD);
+        for _ in 0..HALVINGS {
+            let middle = 0.5 * (good + bad);
+            if within(middle) { good = middle } else { bad = middle }
+        }
+        sign * good
+    }
+
+    /// Least and greatest angle to the chord line that can be had, rad.
+    fn reach(&self, goal: (f64, f64)) -> (f64, f64) {
+        (self.angle(self.farthest(-1.0), goal), self.angle(self.farthest(1.0), goal))
+    }
+
+    /// The turn that gives an angle to the chord line, rad.
+    fn turn_to(&self, angle_rad: f64, goal: (f64, f64)) -> f64 {
+        if (self.angle(0.0, goal) - angle_rad).abs() < LEAST_TURN_RAD {
+            return 0.0;
+        }
+        let (mut low, mut high) = (self.farthest(-1.0), self.farthest(1.0));
+        for _ in 0..HALVINGS {
+            let middle = 0.5 * (low + high);
+            if self.angle(middle, goal) < angle_rad { low = middle } else { high = middle }
+        }
+        0.5 * (low + high)
+    }
+
+    fn told(&self, turn_rad: f64, goal: (f64, f64), wanted_rad: f64) -> PlannedStation {
+        let (cuts, after) = self.finished(turn_rad, goal);
+        let (low, high) = self.reach(goal);
+        PlannedStation {
+            radius_m: self.radius_m,
+            face_leading_m: cuts.face_leading_m,
+            face_trailing_m: cuts.face_trailing_m,
+            back_m: cuts.back_m,
+            trailing_edge_m: cuts.trailing_edge_m,
+            chord_lost_m: (self.slab.chord_m - after.chord_m - cuts.trailing_edge_m).max(0.0),
+            reachable_deg: (low.to_degrees(), high.to_degrees()),
+            wanted_deg: wanted_rad.to_degrees(),
+            angle_deg: (after.face_rad + self.face_to_chord(&after)).to_degrees(),
+            face_angle_deg: self.profile.map(|_| after.face_rad.to_degrees()),
+            chord_m: after.chord_m,
+            thickness_m: after.thickness_m,
+            has_face: self.profile.is_some(),
+        }
+    }
+}

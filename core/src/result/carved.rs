@@ -1,0 +1,236 @@
+//! The propeller as carved, and what can be put right.
+
+use serde::Serialize;
+
+use super::Brief;
+use crate::job::AngleReference;
+
+/// Where a figure of a carved blade comes from.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "kebab-case")]
+pub enum Known {
+    /// Read there.
+    Measured,
+    /// The difference from the drawing is interpolated between readings.
+    Interpolated,
+    /// Beyond the readings the difference of the outermost is held.
+    Held,
+    /// Never read on this blade: as drawn.
+    AsDrawn,
+    /// The blade has no readings: the mean of the others.
+    OtherBlades,
+}
+
+impl Known {
+    /// A few plain words.
+    #[must_use]
+    pub fn words(self) -> &'static str {
+        match self {
+            Self::Measured => "measured",
+            Self::Interpolated => "between readings",
+            Self::Held => "beyond the readings",
+            Self::AsDrawn => "not read, as drawn",
+            Self::OtherBlades => "not read, mean of the other blades",
+        }
+    }
+}
+
+/// The carved blades.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Carved {
+    /// Version of the contract.
+    pub spokeshave: u32,
+    /// The job's title.
+    pub title: String,
+    /// What the angles were read on.
+    pub angle_reference: AngleReference,
+    /// The blades.
+    pub blades: Vec<CarvedBlade>,
+    /// Flight points, drawn and carved.
+    pub flight_points: Vec<CarvedPoint>,
+    /// Static balance.
+    pub balance: StaticBalance,
+    /// Readings that are hard to believe.
+    pub doubts: Vec<Doubt>,
+}
+
+/// One carved blade.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct CarvedBlade {
+    /// Its number, from 1.
+    pub blade: usize,
+    /// How many readings it has.
+    pub readings: usize,
+    /// By radius.
+    pub stations: Vec<CarvedStation>,
+}
+
+/// A carved figure with its differences.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct Read {
+    /// As carved.
+    pub carved: f64,
+    /// Carved less drawn.
+    pub from_drawn: f64,
+    /// This blade less the mean of the blades.
+    pub from_mean: f64,
+    /// Where it comes from.
+    pub known: Known,
+}
+
+/// One blade at one radius.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct CarvedStation {
+    /// Radius, m.
+    pub radius_m: f64,
+    /// Radius over tip radius.
+    pub radius_fraction: f64,
+    /// Blade angle to the chord line, degrees.
+    pub angle_deg: Read,
+    /// Blade angle on the flat face, degrees; `None` without one.
+    pub face_angle_deg: Option<f64>,
+    /// Chord, m.
+    pub chord_m: Read,
+    /// Greatest thickness, m.
+    pub thickness_m: Read,
+    /// How far it lies ahead of the plane of the hub, m, where it was read.
+    pub track_m: Option<f64>,
+}
+
+/// A flight point with the drawn and the carved propeller.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct CarvedPoint {
+    /// As drawn.
+    pub drawn: Brief,
+    /// The propeller of mean carved blades.
+    pub carved: Brief,
+    /// Load of each blade.
+    pub blades: Vec<LoadOf>,
+    /// What shakes once per turn; `None` without an answer, or with one blade.
+    pub once_per_turn: Option<OncePerTurn>,
+    /// Departures by radius.
+    pub stations: Vec<StationDeparture>,
+}
+
+/// What the air does to one blade.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct LoadOf {
+    /// Thrust, N.
+    pub thrust_n: f64,
+    /// Torque, N m.
+    pub torque_n_m: f64,
+    /// Moment of the thrust about the hub, N m.
+    pub bending_n_m: f64,
+    /// Force in the plane of rotation, N.
+    pub drag_n: f64,
+}
+
+/// What unequal blades do to the shaft once per turn.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct OncePerTurn {
+    /// Moment across the shaft by unequal thrust, N m.
+    pub moment_n_m: f64,
+    /// Force across the shaft by unequal drag of the blades, N.
+    pub air_force_n: f64,
+    /// Force across the shaft by unequal masses, N: unbalance times the square of the speed of rotation.
+    pub mass_force_n: f64,
+}
+
+/// Departures at one radius, degrees.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct StationDeparture {
+    /// Radius, m.
+    pub radius_m: f64,
+    /// As drawn.
+    pub drawn_deg: Option<f64>,
+    /// Of each blade.
+    pub blades_deg: Vec<Option<f64>>,
+}
+
+/// Static balance by the blades' shapes.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct StaticBalance {
+    /// Density of the wood, kg/m³.
+    pub density_kg_m3: f64,
+    /// Whether the job gives it; otherwise it is a usual one.
+    pub density_given: bool,
+    /// Each blade.
+    pub blades: Vec<MassOf>,
+    /// Unbalance, kg m.
+    pub unbalance_kg_m: f64,
+    /// The blade that sinks, from 1.
+    pub heavy_blade: Option<usize>,
+    /// The same as a mass at the tip, g.
+    pub grams_at_tip: f64,
+}
+
+/// Mass of one blade outside the hub.
+#[derive(Clone, Copy, Debug, PartialEq, Serialize)]
+pub struct MassOf {
+    /// Mass, kg.
+    pub mass_kg: f64,
+    /// Mass moment about the axis, kg m.
+    pub moment_kg_m: f64,
+}
+
+/// A reading that is hard to believe.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Doubt {
+    /// Blade, from 1.
+    pub blade: usize,
+    /// Radius, m.
+    pub radius_m: f64,
+    /// What it is about, and the likely cause.
+    pub message: String,
+}
+
+/// What to take off, and what comes of it.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct RemovalPlan {
+    /// The flight point at which departure is restored.
+    pub flight_point: String,
+    /// By blade and radius.
+    pub blades: Vec<PlannedBlade>,
+    /// The propeller as the plan leaves it.
+    pub after: Carved,
+}
+
+/// What to take off one blade.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct PlannedBlade {
+    /// Its number, from 1.
+    pub blade: usize,
+    /// By radius.
+    pub stations: Vec<PlannedStation>,
+}
+
+/// What to take off at one radius of one blade. Nothing is ever added.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct PlannedStation {
+    /// Radius, m.
+    pub radius_m: f64,
+    /// Depth off the face at the leading edge, falling to nothing at the trailing edge, m.
+    pub face_leading_m: f64,
+    /// Depth off the face at the trailing edge, falling to nothing at the leading edge, m.
+    pub face_trailing_m: f64,
+    /// Depth off the back at the thickest place, fading to the edges, m.
+    pub back_m: f64,
+    /// Off the trailing edge, after the face, m.
+    pub trailing_edge_m: f64,
+    /// Chord that planing the face takes off the edges by itself, m.
+    pub chord_lost_m: f64,
+    /// Least and greatest angle to the chord line that planing reaches within the limits, degrees.
+    pub reachable_deg: (f64, f64),
+    /// The angle that would restore departure, degrees.
+    pub wanted_deg: f64,
+    /// The angle after the plan, degrees.
+    pub angle_deg: f64,
+    /// The same on the flat face, degrees.
+    pub face_angle_deg: Option<f64>,
+    /// Chord after the plan, m.
+    pub chord_m: f64,
+    /// Thickness after the plan, m.
+    pub thickness_m: f64,
+    /// Whether there is a flat face to plane.
+    pub has_face: bool,
+}

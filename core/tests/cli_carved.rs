@@ -1,0 +1,50 @@
+//! `spokeshave carved` as a script meets it.
+#![cfg(feature = "cli")]
+
+mod command;
+
+use command::{err, out, run};
+use serde_json::Value;
+use spokeshave::job::Job;
+
+const SHEET: &str = "blade,radius_mm,face angle,chord_mm,thickness_mm
+1,300,32 15,94,20.0
+1,540,18 30,76.5,11.4
+1,720,15.2,44,6.0
+2,300,31.1,93.5,20.4
+2,540,19.2,76,11.2
+";
+
+fn carved(rest: &[&str], sheet: &str) -> std::process::Output {
+    run(&[&["carved", "--demo", "light-aeroplane", "--readings", "-"], rest].concat(), sheet)
+}
+
+#[test]
+fn readings_are_told_for_people_for_programs_as_a_sheet_and_as_a_job() {
+    let people = carved(&[], SHEET);
+    let text = out(&people);
+    assert_eq!(people.status.code(), Some(0), "{}", err(&people));
+    for said in
+        ["Blade 2, 2 readings", "between readings", "planned", "take off, mm", "once per turn", "a usual one"]
+    {
+        assert!(text.contains(said), "{said}: {text}");
+    }
+    assert!(!text.contains("NaN") && !text.contains("inf"));
+    let json: Value = serde_json::from_str(&out(&carved(&["--json"], SHEET))).unwrap();
+    assert_eq!(json["carved"]["blades"][0]["stations"].as_array().unwrap().len(), 11);
+    assert!(json["plan"]["blades"][1]["stations"][3]["face_leading_m"].as_f64().unwrap() >= 0.0);
+    let csv = out(&carved(&["--csv"], SHEET));
+    assert_eq!(csv.lines().count(), 1 + 2 * 11);
+    let job = Job::from_json(&out(&carved(&["--job"], SHEET))).unwrap();
+    assert_eq!(job.carved.unwrap().blades[0].readings[1].angle_deg, Some(18.5));
+}
+
+#[test]
+fn bad_readings_end_with_2_and_say_where() {
+    let o = carved(&[], "blade,radius_mm,angle\n1,540,north\n");
+    assert_eq!(o.status.code(), Some(2));
+    assert!(err(&o).contains("line 2, column 3: angle: \"north\""), "{}", err(&o));
+    let o = run(&["carved", "--demo", "light-aeroplane"], "");
+    assert_eq!(o.status.code(), Some(2));
+    assert!(err(&o).contains("no readings of carved blades"), "{}", err(&o));
+}
