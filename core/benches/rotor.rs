@@ -53,7 +53,7 @@ fn lookups_alone(c: &mut Criterion) {
 fn map(c: &mut Criterion) {
     let (rig, _) = rig(40);
     c.bench_function("departure map, 60 speeds x 40 radii", |b| {
-        b.iter(|| rig.map(black_box(2), Along::FullThrottle, 60, 40))
+        b.iter(|| rig.map(black_box(2), Along::FullThrottle, 60, 40));
     });
 }
 

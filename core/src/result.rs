@@ -19,7 +19,10 @@ pub use fit::{
     PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,
 };
 pub use shape::{Bound, Brief, Compared, LeastLoss, LossStation, Origin, Twist, TwistStation};
-pub use strength::Mass;
+pub use strength::{
+    CaseFigures, CaseKind, CaseResult, FrequencyLine, Governing, HubResult, Mass, MaterialUsed, ModeKind,
+    NearOrder, RunningStation, RunningTwist, Strength, StressKind, StressStation, Vibration,
+};
 
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]

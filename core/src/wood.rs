@@ -3,16 +3,33 @@
 //! The blade is a slender beam clamped at the hub, its sections threaded at their centroids on a straight line that may lean
 //! forward by a rake. [`beam`] is plain mathematics on arrays; [`section`] measures the outline; the rest puts a job's blade through both.
 
+mod assumptions;
 pub mod beam;
+mod bent;
 mod blade;
+mod cases;
+mod cautions;
+mod hub;
+mod judged;
+mod loads;
 mod mass;
 mod material;
 mod moisture;
+mod places;
+mod remedy;
 pub mod section;
 mod species;
+mod strength;
+mod stress;
+mod twist;
+mod vibration;
 
 pub use blade::{BladeBeam, WoodError};
+pub use cautions::CAUTIONS;
 pub use mass::mass;
 pub use material::{Material, Strength, material};
 pub use moisture::at_moisture;
+pub use places::{Doubt, Place};
 pub use species::{Kind, SPECIES, Species};
+pub use strength::strength;
+pub use stress::{Carried, Stresses};

@@ -73,6 +73,23 @@ pub struct Ring {
     stall_delay: f64,
 }
 
+/// Load of an element per metre of radius, all blades.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Graded {
+    /// Radius, m.
+    pub radius_m: f64,
+    /// Thrust, N/m.
+    pub thrust_n_m: f64,
+    /// Torque, N m/m.
+    pub torque_n: f64,
+    /// Dynamic pressure `½ ρ W²` of the air that meets the blade, Pa.
+    pub pressure_pa: f64,
+    /// Angle of attack, rad.
+    pub alpha_rad: f64,
+    /// Angle of greatest lift, rad, up and down.
+    pub stall_rad: [f64; 2],
+}
+
 /// A propeller ready for any condition.
 #[derive(Clone, Debug)]
 pub struct Rotor {
@@ -166,6 +183,26 @@ impl Rotor {
     #[must_use]
     pub fn loads(&self, at: &Condition) -> Loads {
         self.sum(&self.rings, at)
+    }
+
+    /// How thrust and torque are spread over the elements, from hub to tip; elements without a balance are left out.
+    #[must_use]
+    pub fn spread(&self, at: &Condition) -> Vec<Graded> {
+        let graded = |ring: &Ring| {
+            let element = self.element(ring, at).0;
+            let balance = element.balance()?;
+            let (thrust_n_m, torque_n) = self.grading(ring, at, &balance);
+            let pressure_pa = 0.5 * at.air.density_kg_m3 * balance.speed_m_s.powi(2);
+            Some(Graded {
+                radius_m: ring.cut.radius_m,
+                thrust_n_m,
+                torque_n,
+                pressure_pa,
+                alpha_rad: balance.alpha_rad,
+                stall_rad: [element.section.stall_rad(), element.section.negative_stall_rad()],
+            })
+        };
+        self.rings.iter().filter_map(graded).collect()
     }
 
     /// The same by few elements: within some per cent, for a first look.

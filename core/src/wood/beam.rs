@@ -13,5 +13,6 @@ mod tests;
 mod twisting;
 
 pub use bending::{Bending, BendingMode};
-pub use integrate::{bending_n_m, first_moment, second_moment, tension_n, total};
+pub(crate) use figures::at;
+pub use integrate::{bending_n_m, first_moment, outboard, second_moment, tension_n, total};
 pub use twisting::Twisting;

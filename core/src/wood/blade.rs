@@ -3,10 +3,13 @@
 use thiserror::Error;
 
 use super::material::{Material, material};
+use super::places::{Doubt, Place, places};
 use super::section::{Section, Shape};
 use crate::blade::Blade;
+use crate::curve::Curve;
 use crate::job::Job;
 use crate::rig::Rig;
+use crate::rotor::Condition;
 
 /// Why the strength of a job's blade cannot be judged.
 #[derive(Clone, Debug, Error, PartialEq)]
@@ -20,10 +23,13 @@ pub enum WoodError {
         /// What is known.
         known: String,
     },
+    /// Stations that do not rise, or figures that are no numbers.
+    #[error("propeller.stations: radii must rise and every figure must be a number")]
+    Stations,
 }
 
 /// Evenly spaced spans of the beam between hub and tip; the stations are put in besides.
-const SPANS: usize = 96;
+pub(super) const SPANS: usize = 96;
 /// Root of the beam over the tip radius where the job's hub is nothing.
 const LEAST_ROOT: f64 = 0.01;
 /// Thickness ratios at which outlines can be drawn.
@@ -46,60 +52,79 @@ pub struct BladeBeam {
     pub angles_rad: Vec<f64>,
     /// Mass per metre of radius, kg/m.
     pub mass_kg_m: Vec<f64>,
+    /// How far the blades are turned in the hub, rad; in the angles.
+    pub turn_rad: f64,
+    /// Lean forward of the plane of rotation, rad.
+    pub rake_rad: f64,
+    /// Radii of all stations, m, and their sections' shapes.
+    stations_m: Vec<f64>,
+    drawn: Vec<Drawn>,
     /// What is judged: the edge of the hub, where no station stands there, then the stations outside the hub.
     pub places: Vec<Place>,
-}
-
-/// A radius at which stress is judged.
-#[derive(Clone, Debug)]
-pub struct Place {
-    /// Index into [`BladeBeam::radii_m`].
-    pub index: usize,
-    /// Index of the station in the job; `None` at the edge of the hub.
-    pub station: Option<usize>,
-    /// Thickness over chord.
-    pub thickness_ratio: f64,
-    /// The section's shape.
-    pub shape: Shape,
-    /// What is not known of the section.
-    pub doubt: Option<Doubt>,
-}
-
-/// What is not known of a section.
-#[derive(Clone, Copy, Debug, PartialEq, Eq)]
-pub enum Doubt {
-    /// It has no outline: a usual section is taken.
-    NoOutline,
-    /// Its outline cannot be drawn so thick or thin: the nearest is stretched.
-    Stretched,
 }
 
 impl BladeBeam {
     /// The blade of a job made ready.
     ///
     /// # Errors
-    /// A species that is not known.
+    /// A species that is not known; stations that [`Job::check`](crate::job::Job::check) refuses.
     pub fn new(rig: &Rig) -> Result<Self, WoodError> {
-        let material = material(&rig.job.wood.clone().unwrap_or_default())?;
+        let wood = rig.job.wood.clone().unwrap_or_default();
         let blade = &rig.rotor.blade;
+        let stations_m: Vec<f64> = blade.station_radii_m().collect();
+        let radii_m = radii(blade, &stations_m);
         let drawn = shapes(&rig.job);
-        let stations: Vec<f64> = blade.station_radii_m().collect();
-        let radii_m = radii(blade, &stations);
-        let cut = |r: &f64| blade.cut(*r);
-        let chords_m: Vec<f64> = radii_m.iter().map(|r| cut(r).chord_m).collect();
-        let shaped = Shapes { radii_m: &stations, drawn: &drawn };
-        let sections: Vec<Section> =
-            radii_m.iter().map(|r| shaped.section(*r, cut(r).chord_m, cut(r).thickness_ratio)).collect();
-        Ok(Self {
+        let thickness: Vec<f64> = rig.job.propeller.stations.iter().map(|s| s.thickness_ratio).collect();
+        let beam = Self {
             blades: blade.count,
-            mass_kg_m: sections.iter().map(|s| material.density_kg_m3 * s.area_m2).collect(),
-            angles_rad: radii_m.iter().map(|r| cut(r).angle_rad + rig.turn_rad()).collect(),
-            places: places(blade, &radii_m, &stations, &drawn),
-            material,
+            material: material(&wood)?,
+            chords_m: radii_m.iter().map(|r| blade.cut(*r).chord_m).collect(),
+            angles_rad: radii_m.iter().map(|r| blade.cut(*r).angle_rad + rig.turn_rad()).collect(),
+            turn_rad: rig.turn_rad(),
+            rake_rad: wood.rake_deg.to_radians(),
+            places: places(&radii_m, &stations_m, &drawn),
+            sections: Vec::new(),
+            mass_kg_m: Vec::new(),
             radii_m,
-            sections,
-            chords_m,
-        })
+            stations_m,
+            drawn,
+        };
+        beam.with_thickness(&thickness).ok_or(WoodError::Stations)
+    }
+
+    /// The same blade with other thickness ratios of its stations; `None` unless they are as many finite numbers.
+    #[must_use]
+    pub fn with_thickness(&self, ratios: &[f64]) -> Option<Self> {
+        let thickness = Curve::new(self.stations_m.clone(), ratios.to_vec())?;
+        let mut beam = self.clone();
+        let section = |(r, chord): (&f64, &f64)| self.section(*r, *chord, thickness.at(*r));
+        beam.sections = self.radii_m.iter().zip(&self.chords_m).map(section).collect();
+        beam.mass_kg_m = beam.sections.iter().map(|s| self.material.density_kg_m3 * s.area_m2).collect();
+        for place in &mut beam.places {
+            place.thickness_ratio = thickness.at(self.radii_m[place.index]);
+        }
+        Some(beam)
+    }
+
+    /// The section at a radius: shapes run straight between the stations and are held outside.
+    fn section(&self, radius_m: f64, chord_m: f64, thickness_ratio: f64) -> Section {
+        let sized = |i: usize| self.drawn[i].shape.sized(chord_m, thickness_ratio);
+        let above = self.stations_m.partition_point(|r| *r <= radius_m);
+        if above == 0 || above == self.stations_m.len() {
+            return sized(above.saturating_sub(1));
+        }
+        let (r0, r1) = (self.stations_m[above - 1], self.stations_m[above]);
+        sized(above - 1).towards(&sized(above), (radius_m - r0) / (r1 - r0))
+    }
+
+    /// How far a condition turns the blades beyond the angles kept here, rad.
+    pub(super) fn beyond_rad(&self, at: &Condition) -> f64 {
+        at.turn_rad - self.turn_rad
+    }
+
+    /// A figure known at the radii, at any radius, m; held outside.
+    pub(super) fn at(&self, values: &[f64], radius_m: f64) -> f64 {
+        super::beam::at(&self.radii_m, values, radius_m)
     }
 }
 
@@ -111,7 +136,7 @@ fn root_m(blade: &Blade) -> f64 {
 /// Evenly spaced radii with the stations among them.
 fn radii(blade: &Blade, stations_m: &[f64]) -> Vec<f64> {
     let (root, tip) = (root_m(blade), blade.radius_m);
-    let near = 0.02 * (tip - root) / SPANS as f64;
+    let near = 0.3 * (tip - root) / SPANS as f64;
     let mut all: Vec<f64> =
         stations_m.iter().copied().filter(|r| *r > root + near && *r < tip - near).collect();
     let even = (0..=SPANS).map(|i| root + (tip - root) * i as f64 / SPANS as f64);
@@ -123,9 +148,9 @@ fn radii(blade: &Blade, stations_m: &[f64]) -> Vec<f64> {
 
 /// A section's shape, with what is not known of it.
 #[derive(Clone, Debug)]
-struct Drawn {
-    shape: Shape,
-    doubt: Option<Doubt>,
+pub(super) struct Drawn {
+    pub(super) shape: Shape,
+    pub(super) doubt: Option<Doubt>,
 }
 
 /// The shape at every station.
@@ -139,46 +164,4 @@ fn shape(job: &Job, name: &str, thickness_ratio: f64) -> Drawn {
         return Drawn { shape: Shape::usual(), doubt: Some(Doubt::NoOutline) };
     };
     Drawn { shape: Shape::of(&outline), doubt: (held != thickness_ratio).then_some(Doubt::Stretched) }
-}
-
-fn places(blade: &Blade, radii_m: &[f64], stations_m: &[f64], drawn: &[Drawn]) -> Vec<Place> {
-    let place = |index: usize, station: Option<usize>, of: usize| Place {
-        index,
-        station,
-        thickness_ratio: blade.cut(radii_m[index]).thickness_ratio,
-        shape: drawn[of].shape.clone(),
-        doubt: drawn[of].doubt,
-    };
-    let near = 1e-9 + 0.03 * (radii_m[radii_m.len() - 1] - radii_m[0]) / SPANS as f64;
-    let index_of = |r: f64| {
-        let best =
-            (0..radii_m.len()).min_by(|a, b| (radii_m[*a] - r).abs().total_cmp(&(radii_m[*b] - r).abs()));
-        best.filter(|i| (radii_m[*i] - r).abs() <= near)
-    };
-    let outside: Vec<Place> = stations_m
-        .iter()
-        .enumerate()
-        .filter_map(|(station, r)| Some(place(index_of(*r)?, Some(station), station)))
-        .collect();
-    let next = stations_m.iter().position(|r| *r >= radii_m[0]).unwrap_or(stations_m.len() - 1);
-    let edge = outside.first().is_none_or(|p| p.index > 0).then(|| place(0, None, next));
-    edge.into_iter().chain(outside).collect()
-}
-
-/// Shapes at the stations, running straight between them.
-struct Shapes<'a> {
-    radii_m: &'a [f64],
-    drawn: &'a [Drawn],
-}
-
-impl Shapes<'_> {
-    fn section(&self, radius_m: f64, chord_m: f64, thickness_ratio: f64) -> Section {
-        let sized = |i: usize| self.drawn[i].shape.sized(chord_m, thickness_ratio);
-        let above = self.radii_m.partition_point(|r| *r <= radius_m);
-        if above == 0 || above == self.radii_m.len() {
-            return sized(above.saturating_sub(1));
-        }
-        let (r0, r1) = (self.radii_m[above - 1], self.radii_m[above]);
-        sized(above - 1).towards(&sized(above), (radius_m - r0) / (r1 - r0))
-    }
 }

@@ -29,6 +29,9 @@ pub struct Material {
 }
 
 /// How much of a strength may be asked: `mean (1 − 1.645 scatter) lasting / safety`, or the user's own limit.
+///
+/// In compression along the grain the strength of wood is its proportional limit, below which no fibres buckle and repeated load takes nothing
+/// (ANC-18, *Design of Wood Aircraft Structures*, section 2.1: 0.75 of the crushing strength of hardwoods, 0.80 of softwoods).
 #[derive(Clone, Debug, PartialEq)]
 pub struct Strength {
     /// Mean strength of the material at its moisture, Pa.
@@ -59,7 +62,7 @@ const USUAL_MOISTURE: f64 = 12.0;
 /// Scatter of the four strengths and what lasts, by kind; for other materials than wood from memory, on the low side.
 fn habits(kind: Kind) -> ([f64; 4], f64) {
     match kind {
-        Kind::Wood => (WOOD_SCATTER, WOOD_LASTS),
+        Kind::Hardwood | Kind::Softwood => (WOOD_SCATTER, WOOD_LASTS),
         Kind::Plastic => ([0.10; 4], 0.3),
         Kind::Composite => ([0.10; 4], 0.4),
     }
@@ -98,10 +101,12 @@ fn known_material(s: &Species, wood: &Wood) -> Material {
     let wet = |[dry, green]: [f64; 2]| 1e6 * at_moisture(dry, green, s.meets_percent, moisture);
     let modulus_pa = wet(s.modulus_mpa);
     let ([bending, along, shear, across], lasting) = habits(s.kind);
-    let strength = |mpa, scatter| Taken { scatter, lasting, safety: wood.safety_factor }.off(wet(mpa));
+    let taken = |scatter| Taken { scatter, lasting, safety: wood.safety_factor };
+    let strength = |mpa, scatter| taken(scatter).off(wet(mpa));
+    let pressed = |share: f64| taken(along).off_threshold(share, wet(s.compression_mpa));
     // The oven-dry wood stays, its water changes; the swelling of the volume is left out, less than 2 %.
     let heavier = match s.kind {
-        Kind::Wood => (100.0 + moisture) / (100.0 + USUAL_MOISTURE),
+        Kind::Hardwood | Kind::Softwood => (100.0 + moisture) / (100.0 + USUAL_MOISTURE),
         Kind::Plastic | Kind::Composite => 1.0,
     };
     Material {
@@ -111,7 +116,11 @@ fn known_material(s: &Species, wood: &Wood) -> Material {
         modulus_pa,
         shear_modulus_pa: s.shear_share * modulus_pa,
         tension: strength(s.bending_mpa, bending),
-        compression: strength(s.compression_mpa, along),
+        compression: match s.kind {
+            Kind::Hardwood => pressed(0.75),
+            Kind::Softwood => pressed(0.80),
+            Kind::Plastic | Kind::Composite => strength(s.compression_mpa, along),
+        },
         shear: strength(s.shear_mpa, shear),
         crushing: strength(s.crushing_mpa, across),
     }
@@ -131,7 +140,7 @@ fn own_material(own: &OwnMaterial, wood: &Wood) -> Material {
         modulus_pa: own.modulus_pa,
         shear_modulus_pa: own.shear_modulus_pa.unwrap_or(own.modulus_pa / 14.0),
         tension: strength(bending, 0),
-        compression: strength(own.compression_strength_pa.unwrap_or(bending / 2.0), 1),
+        compression: strength(own.compression_strength_pa.unwrap_or(0.75 * bending), 1),
         shear: strength(own.shear_strength_pa.unwrap_or(bending / 10.0), 2),
         crushing: strength(own.crushing_strength_pa.unwrap_or(bending / 15.0), 3),
     }
@@ -149,6 +158,23 @@ impl Taken {
             low / 1e6,
             100.0 * self.scatter,
             100.0 * self.lasting,
+            self.safety
+        );
+        Strength { mean_pa, limit_pa, reason }
+    }
+
+    /// The same for the share of a mean strength below which repeated load takes nothing.
+    fn off_threshold(self, share: f64, crushing_pa: f64) -> Strength {
+        let mean_pa = share * crushing_pa;
+        let limit_pa = mean_pa * (1.0 - 1.645 * self.scatter) / self.safety;
+        let reason = format!(
+            "{:.1} MPa: proportional limit {:.1} ({share} of the mean crushing strength {:.1}), of which 19 pieces in 20 reach {:.1} \
+             (scatter {:.0} %), over a safety factor of {}",
+            limit_pa / 1e6,
+            mean_pa / 1e6,
+            crushing_pa / 1e6,
+            limit_pa * self.safety / 1e6,
+            100.0 * self.scatter,
             self.safety
         );
         Strength { mean_pa, limit_pa, reason }

@@ -3,6 +3,7 @@
 //! Area and moments are those of the outline's polygon, by the usual boundary sums. Axes: ξ along the chord line from leading to trailing edge, η
 //! square to it towards the back, through the centroid.
 
+mod moment;
 mod torsion;
 
 use crate::section::outline::Outline;
@@ -23,6 +24,8 @@ pub struct Shape {
     pub product: f64,
     /// Torsion constant over `c t³`.
     pub torsion: f64,
+    /// Moment coefficient about the quarter chord over the thickness ratio.
+    pub moment: f64,
     /// Points of the rim from the centroid, over `c` and over `t`.
     pub rim: Vec<[f64; 2]>,
 }
@@ -42,6 +45,8 @@ pub struct Section {
     pub product_m4: f64,
     /// Torsion constant, m⁴.
     pub torsion_m4: f64,
+    /// Moment coefficient about the quarter chord, nose up positive.
+    pub moment: f64,
 }
 
 impl Shape {
@@ -57,6 +62,7 @@ impl Shape {
             edge: m.i_edge / t,
             product: m.i_product / t.powi(2),
             torsion: torsion::constant(outline.points()) / t.powi(3),
+            moment: moment::quarter_chord(outline.points()) / t,
             rim: outline.points().iter().map(from_centroid).collect(),
         }
     }
@@ -72,6 +78,7 @@ impl Shape {
             edge: 0.045,
             product: 0.0,
             torsion: 0.15,
+            moment: -0.6,
             rim: vec![[-x, -y], [x, -y], [x, y], [-x, y]],
         }
     }
@@ -87,6 +94,7 @@ impl Shape {
             edge_m4: self.edge * c.powi(3) * t,
             product_m4: self.product * (c * t).powi(2),
             torsion_m4: self.torsion * c * t.powi(3),
+            moment: self.moment * thickness_ratio,
         }
     }
 }
@@ -103,6 +111,7 @@ impl Section {
             edge_m4: mix(self.edge_m4, other.edge_m4),
             product_m4: mix(self.product_m4, other.product_m4),
             torsion_m4: mix(self.torsion_m4, other.torsion_m4),
+            moment: mix(self.moment, other.moment),
         }
     }
 

@@ -17,7 +17,7 @@ pub(crate) struct Args {
 
 #[derive(Subcommand)]
 enum What {
-    /// Material, sections, weight and balance
+    /// Stress and margin by station, deflection, vibration, weight and balance, hub
     Strength(strength::Args),
 }
 

@@ -37,8 +37,8 @@ const EXAMPLES: &str = "Examples:
   spokeshave fit JOB.json --vary propeller.diameter_m=1.4..1.7:31    the same over any number of the file, CSV
   spokeshave shape JOB.json twist --point Cruise   angles that put every station at its best lift-to-drag
   spokeshave shape JOB.json least-loss --point Cruise --job > NEW.json    least induced loss, as a job of its own
-  spokeshave bench JOB.json strength               weight and balance of the blade in its wood
   spokeshave carved JOB.json --readings READINGS.csv    the blades as measured, and what to take off
+  spokeshave bench JOB.json strength               stress and margin by station, vibration, weight, hub
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from

@@ -90,7 +90,7 @@ pub struct OwnMaterial {
     pub modulus_pa: f64,
     /// Mean strength in bending or tension along the blade (for wood the modulus of rupture), Pa.
     pub bending_strength_pa: f64,
-    /// Mean strength in compression along the blade, Pa; without it half of the bending strength.
+    /// Mean strength in compression along the blade, Pa; without it three quarters of the bending strength.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub compression_strength_pa: Option<f64>,
     /// Mean strength in shear along the blade, Pa; without it a tenth of the bending strength.

@@ -13,7 +13,7 @@ pub(super) const GAUSS: [(f64, f64); 4] = [
 ];
 
 /// Value at `x` of a figure that runs straight between the radii; held outside.
-pub(super) fn at(radii_m: &[f64], values: &[f64], x: f64) -> f64 {
+pub(crate) fn at(radii_m: &[f64], values: &[f64], x: f64) -> f64 {
     let last = radii_m.len() - 1;
     let above = radii_m.partition_point(|r| *r <= x).clamp(1, last);
     let (a, b) = (above - 1, above);

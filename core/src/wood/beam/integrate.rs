@@ -18,6 +18,18 @@ pub fn second_moment(radii_m: &[f64], q: &[f64]) -> f64 {
     spans(radii_m, q).map(|s| s.moment(2)).sum()
 }
 
+/// `∫_r^R q dx` at each radius.
+#[must_use]
+pub fn outboard(radii_m: &[f64], q: &[f64]) -> Vec<f64> {
+    let mut sum = 0.0;
+    let mut at = vec![0.0; radii_m.len()];
+    for (i, span) in spans(radii_m, q).enumerate().collect::<Vec<_>>().into_iter().rev() {
+        sum += span.moment(0);
+        at[i] = sum;
+    }
+    at
+}
+
 /// Tension `N(r) = Ω² ∫_r^R m x dx`, N, at each radius, of a mass per metre `m`, kg/m, that turns at Ω, rad/s.
 #[must_use]
 pub fn tension_n(radii_m: &[f64], mass_kg_m: &[f64], rotation_rad_s: f64) -> Vec<f64> {

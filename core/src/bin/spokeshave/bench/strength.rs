@@ -1,42 +1,88 @@
 //! `spokeshave bench JOB strength`.
 
-use serde::Serialize;
-use spokeshave::result::Mass;
-use spokeshave::rig::Rig;
-use spokeshave::wood::{BladeBeam, mass};
+mod text;
 
-use crate::input::{Outcome, Stop, print, print_json};
-use crate::table::{figure, table};
+use spokeshave::result::{Strength, StressStation};
+use spokeshave::rig::Rig;
+use spokeshave::wood;
+
+use crate::input::{Format, Outcome, Stop, print, print_csv, print_json};
+use crate::table::{csv_figure, word};
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
-    /// One JSON document, SI units
-    #[arg(long)]
-    json: bool,
-}
-
-#[derive(Serialize)]
-struct Told {
-    material: String,
-    mass: Mass,
+    #[command(flatten)]
+    format: Format,
 }
 
 pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
-    let beam = BladeBeam::new(rig).map_err(Stop::bad)?;
-    let told = Told { material: beam.material.title.clone(), mass: mass(&beam) };
-    if args.json {
-        print_json(&told)?;
+    let strength = wood::strength(rig).map_err(Stop::bad)?;
+    if args.format.json {
+        print_json(&strength)?;
+    } else if args.format.csv {
+        print_csv(&HEADER, strength.stations.iter().map(row))?;
     } else {
-        let m = &told.mass;
-        let rows = [
-            ("one blade, kg", m.blade_kg, 3),
-            ("all blades, kg", m.blades_kg, 3),
-            ("centre of gravity from the axis, mm", 1e3 * m.centre_m, 1),
-            ("static moment of one blade, kg mm", 1e3 * m.static_moment_kg_m, 1),
-            ("inertia of all blades, kg m²", m.inertia_kg_m2, 4),
-        ];
-        let rows = rows.map(|(what, value, decimals)| vec![what.into(), figure(Some(value), decimals)]);
-        print(&table(&[&told.material, ""], rows.to_vec()))?;
+        print(&text::sheet(&strength))?;
     }
-    Ok(true)
+    Ok(answered(&strength))
+}
+
+fn answered(strength: &Strength) -> bool {
+    if strength.governing.is_none() {
+        eprintln!(
+            "spokeshave: no answer: no flight point has one, so that no load is known; the list of cases says why"
+        );
+    }
+    strength.governing.is_some()
+}
+
+const HEADER: [&str; 20] = [
+    "station",
+    "radius_m",
+    "chord_m",
+    "thickness_m",
+    "area_m2",
+    "flat_m4",
+    "edge_m4",
+    "torsion_m4",
+    "case",
+    "tension_n",
+    "flat_n_m",
+    "edge_n_m",
+    "twisting_n_m",
+    "axial_pa",
+    "tension_pa",
+    "compression_pa",
+    "shear_pa",
+    "kind",
+    "margin",
+    "thicker_m",
+];
+
+fn row(s: &StressStation) -> Vec<String> {
+    let figures = |of: &[Option<f64>]| of.iter().map(|v| csv_figure(*v)).collect::<Vec<_>>();
+    let mut row = vec![s.station.map_or_else(|| "hub".into(), |n| n.to_string())];
+    row.extend(figures(&[
+        Some(s.radius_m),
+        Some(s.chord_m),
+        Some(s.thickness_m),
+        Some(s.area_m2),
+        Some(s.flat_m4),
+        Some(s.edge_m4),
+        Some(s.torsion_m4),
+    ]));
+    row.push(s.case.clone().unwrap_or_default());
+    row.extend(figures(&[
+        s.tension_n,
+        s.flat_n_m,
+        s.edge_n_m,
+        s.twisting_n_m,
+        s.axial_pa,
+        s.tension_pa,
+        s.compression_pa,
+        s.shear_pa,
+    ]));
+    row.push(s.kind.map(|k| word(&k)).unwrap_or_default());
+    row.extend(figures(&[s.margin, s.thicker_m]));
+    row
 }

@@ -1,0 +1,49 @@
+//! What was taken for granted of a job, in sentences.
+
+use super::{BladeBeam, Doubt};
+use crate::result::CaseResult;
+use crate::rig::Rig;
+
+/// What was taken for granted of this job.
+pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> Vec<String> {
+    let mut all = Vec::new();
+    if rig.job.wood.is_none() {
+        all.push(format!("The job names no material (wood.species): {} is taken.", beam.material.title));
+    }
+    all.push(format!(
+        "Values: {}. Grain straight and along the blade, no knots, glue as strong as the wood.",
+        beam.material.source
+    ));
+    let lean = beam.rake_rad.to_degrees();
+    let stands = if lean == 0.0 { "does not lean".into() } else { format!("leans forward by {lean:.1}°") };
+    all.push(format!(
+        "The sections' centroids stand on a straight line that {stands}; the blade is clamped at the edge of the hub."
+    ));
+    all.push(
+        "Steady load only, without gyroscopic load, gust, engine pulse or strike. Bending is what is left when centrifugal force has pulled \
+         the bent blade straighter; a stiffer piece of wood than the mean is relieved less."
+            .into(),
+    );
+    all.extend(beam.places.iter().filter_map(|p| Some(doubt(p.station?, p.doubt?, p.thickness_ratio))));
+    let judged = beam.places.iter().filter(|p| p.station.is_some()).count();
+    let left_out = rig.job.propeller.stations.len() - judged;
+    if left_out > 0 {
+        all.push(format!("Not judged: {left_out} stations inside the hub or at the very tip."));
+    }
+    let silent = cases.iter().filter(|c| c.figures.is_none());
+    all.extend(
+        silent.map(|c| format!("“{}” has no answer and is not in it. {}", c.name, c.state.sentence())),
+    );
+    all
+}
+
+fn doubt(station: usize, doubt: Doubt, thickness_ratio: f64) -> String {
+    let n = station + 1;
+    match doubt {
+        Doubt::NoOutline => format!("Station {n}: its section has no outline; a usual section is taken."),
+        Doubt::Stretched => format!(
+            "Station {n}: its outline cannot be drawn {:.0} % thick; the nearest that can is stretched.",
+            100.0 * thickness_ratio
+        ),
+    }
+}

@@ -1,0 +1,199 @@
+//! What must hold of the strength of a blade.
+
+mod any_job;
+
+use any_job::jobs;
+use proptest::prelude::*;
+use serde_json::Value;
+use spokeshave::job::{DEMOS, Hub, Job, OwnMaterial, Species, StressLimits, Wood};
+use spokeshave::result::{CaseKind, ModeKind, Strength};
+use spokeshave::rig::Rig;
+use spokeshave::wood::strength;
+
+fn demo(i: usize) -> Job {
+    Job::from_json(DEMOS[i].json).unwrap()
+}
+
+fn sheet(job: &Job) -> Strength {
+    strength(&Rig::new(job).unwrap()).unwrap()
+}
+
+fn margin(job: &Job) -> f64 {
+    sheet(job).governing.unwrap().margin
+}
+
+fn with(change: impl Fn(&mut Wood)) -> Job {
+    let mut job = demo(0);
+    let mut wood = Wood::default();
+    change(&mut wood);
+    job.wood = Some(wood);
+    assert_eq!(job.check(), vec![]);
+    job
+}
+
+/// Numbers that JSON had to write as null although the sheet has an answer.
+fn nulls(path: &str, value: &Value) -> Vec<String> {
+    match value {
+        Value::Null => vec![path.to_string()],
+        Value::Object(o) => o.iter().flat_map(|(k, v)| nulls(&format!("{path}.{k}"), v)).collect(),
+        Value::Array(a) => {
+            a.iter().enumerate().flat_map(|(i, v)| nulls(&format!("{path}[{i}]"), v)).collect()
+        }
+        _ => Vec::new(),
+    }
+}
+
+#[test]
+fn every_demo_has_a_whole_sheet() {
+    for (i, demo) in DEMOS.iter().enumerate() {
+        let sheet = sheet(&self::demo(i));
+        let missing = nulls("", &serde_json::to_value(&sheet).unwrap());
+        let allowed = |p: &String| {
+            [".thicker_m", ".hub", ".station", "_departure_deg"].iter().any(|end| p.ends_with(end))
+        };
+        assert!(missing.iter().all(allowed), "{}: {missing:?}", demo.name);
+        assert!(sheet.cases.iter().any(|c| c.kind == CaseKind::Overspeed), "{}", demo.name);
+        assert!(sheet.material.assumed && sheet.assumptions[0].contains("yellow birch"), "{}", demo.name);
+        assert!(sheet.running.iter().all(|r| r.settled), "{}: {:?}", demo.name, sheet.running);
+        let modes: Vec<ModeKind> = sheet.vibration.lines.iter().map(|l| l.mode).collect();
+        assert_eq!((modes[0], modes.len()), (ModeKind::Flap, 4), "{}", demo.name);
+        for line in &sheet.vibration.lines {
+            assert!(
+                line.hz.windows(2).all(|w| w[1] > w[0] - 1e-9),
+                "{}: turning stiffens: {line:?}",
+                demo.name
+            );
+        }
+    }
+}
+
+#[test]
+fn the_remedy_restores_the_margin() {
+    let mut job = with(|_| {});
+    let before = sheet(&job);
+    let g = before.governing.as_ref().unwrap();
+    assert!(g.margin < -0.1 && g.sentence.contains("More thickness restores it"), "{}", g.sentence);
+    for s in &before.stations {
+        let (Some(n), Some(more)) = (s.station, s.thicker_m) else { continue };
+        job.propeller.stations[n - 1].thickness_ratio += more / s.chord_m;
+    }
+    let after = sheet(&job).governing.unwrap();
+    // What is left is the air's load, which a thicker section changes a little.
+    assert!(after.margin > -0.05, "{}", after.sentence);
+}
+
+#[test]
+fn more_is_asked_of_a_blade_that_turns_faster_is_weaker_or_wetter() {
+    let base = margin(&with(|_| {}));
+    let pull = |factor: f64| {
+        let cases = sheet(&with(|w| w.overspeed = factor)).cases;
+        let over = cases.iter().find(|c| c.kind == CaseKind::Overspeed).unwrap();
+        over.figures.as_ref().unwrap().root_tension_n
+    };
+    assert!((pull(1.3) / pull(1.0) - 1.69).abs() < 1e-9);
+    assert!(margin(&with(|w| w.moisture_percent = 20.0)) < base);
+    assert!(margin(&with(|w| w.species = Species::Named("Sitka spruce".into()))) < base);
+    let halved = margin(&with(|w| w.safety_factor = 3.0));
+    assert!(((halved + 1.0) * 2.0 - (base + 1.0)).abs() < 1e-9, "{halved} {base}");
+    let limits = StressLimits { tension_pa: Some(1e9), compression_pa: Some(1e9), shear_pa: Some(1e9) };
+    assert!(margin(&with(|w| w.limits = limits.clone())) > 10.0);
+}
+
+#[test]
+fn rake_relieves_bending_by_thrust() {
+    let root = |rake: f64| {
+        let sheet = sheet(&with(|w| w.rake_deg = rake));
+        let standing =
+            sheet.cases.iter().find(|c| c.name == "Standing start").unwrap().figures.clone().unwrap();
+        (
+            standing.root_forward_n_m,
+            standing.root_tension_n,
+            standing.tip_forward_m.unwrap(),
+            sheet.mass.static_moment_kg_m,
+        )
+    };
+    let (upright, leaning) = (root(0.0), root(1.0));
+    assert!(leaning.0 < upright.0 && leaning.2 < upright.2, "{upright:?} {leaning:?}");
+    // Less by tan(rake) Ω² ∫ m x (x − r) dx, which is below tan(rake) times tension times the length.
+    let less = upright.0 - leaning.0;
+    assert!(less < 1_f64.to_radians().tan() * upright.1 * (0.76 - 0.09) && less > 0.0, "{less}");
+}
+
+#[test]
+fn a_hub_is_judged_by_bolts_boss_and_clamping() {
+    let hub = Hub {
+        thickness_m: 0.1,
+        flange_diameter_m: 0.15,
+        bore_m: 0.02,
+        bolts: 6,
+        bolt_circle_m: 0.1,
+        bolt_diameter_m: 0.008,
+        bolt_torque_n_m: Some(16.0),
+    };
+    let sheet = sheet(&with(|w| w.hub = Some(hub.clone())));
+    let h = sheet.hub.unwrap();
+    let torque = sheet.cases.iter().filter_map(|c| Some(c.figures.as_ref()?.torque_n_m)).fold(0.0, f64::max);
+    assert!((h.bolt_force_n - torque / 0.3).abs() < 1e-6 && (h.torque_n_m - torque).abs() < 1e-9);
+    // F = T/(0.2 d) on six bolts over the ring's wood.
+    let area = std::f64::consts::FRAC_PI_4 * (0.15_f64.powi(2) - 0.02_f64.powi(2) - 6.0 * 0.008_f64.powi(2));
+    assert!((h.clamp_pa.unwrap() - 6.0 * 16.0 / (0.2 * 0.008) / area).abs() < 1.0);
+    assert!((h.most_bolt_torque_n_m / 16.0 - h.clamp_limit_pa / h.clamp_pa.unwrap()).abs() < 1e-9);
+    assert!(h.friction_share.unwrap() > 1.0);
+}
+
+#[test]
+fn rotation_turns_the_blade_finer_and_lift_ahead_of_the_centroid_coarser() {
+    let sheet = sheet(&with(|_| {}));
+    let twist = |name: &str| {
+        let case = sheet.cases.iter().find(|c| c.name.starts_with(name)).unwrap();
+        case.figures.as_ref().unwrap().tip_twist_deg.unwrap()
+    };
+    // Little thrust and the fastest turning, and much thrust.
+    assert!(twist("Overspeed") < 0.0 && twist("Standing") > 1.0);
+}
+
+#[test]
+fn materials_by_name_and_own_values_are_told() {
+    let own = OwnMaterial {
+        name: "printed blend".into(),
+        density_kg_m3: 1_100.0,
+        modulus_pa: 2.5e9,
+        bending_strength_pa: 6e7,
+        compression_strength_pa: None,
+        shear_strength_pa: None,
+        crushing_strength_pa: None,
+        shear_modulus_pa: None,
+        scatter: Some(0.0),
+        lasting_share: Some(1.0),
+    };
+    let sheet = sheet(&with(|w| w.species = Species::Own(own.clone())));
+    assert_eq!(sheet.material.name, "printed blend");
+    assert!(
+        (sheet.material.tension_limit_pa - 4e7).abs() < 1e-3
+            && (sheet.material.compression_limit_pa - 3e7).abs() < 1e-3
+    );
+    let unknown = with(|w| w.species = Species::Named("ironbark".into()));
+    let said = strength(&Rig::new(&unknown).unwrap()).unwrap_err().to_string();
+    assert!(said.contains("wood.species: \"ironbark\"") && said.contains("white-ash"), "{said}");
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(16))]
+
+    #[test]
+    fn any_valid_job_has_a_sheet_without_panic_or_a_figure_that_is_not_finite(job in jobs()) {
+        let sheet = sheet(&job);
+        let missing = nulls("", &serde_json::to_value(&sheet).unwrap());
+        let must = ["_kg", "_kg_m", "_kg_m2", "centre_m", "hz", "rpm", "_n", "_pa", "_n_m", ".margin", "_m4"];
+        for path in missing {
+            let last = path.rsplit('.').next().unwrap_or_default().to_string();
+            let answered = sheet.governing.is_some() || !path.starts_with(".stations");
+            let optional = ["tip_forward_m", "tip_against_m", "running_rpm"].contains(&last.as_str());
+            prop_assert!(!answered || optional || !must.iter().any(|m| last.ends_with(m)), "{}", path);
+        }
+        for s in &sheet.stations {
+            let finite = [s.margin, s.tension_pa, s.compression_pa, s.shear_pa].iter().flatten().all(|v| v.is_finite());
+            prop_assert!(finite && s.area_m2 > 0.0, "{:?}", s);
+        }
+    }
+}
