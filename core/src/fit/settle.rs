@@ -128,8 +128,8 @@ impl Demand<'_> {
         let search = Search {
             wanted: if free == Free::Rpm { Wanted::Highest } else { Wanted::Lowest },
             steps,
-            rough: &|x| look(x, &|at| rotor.rough_loads(at)),
-            exact: &|x| look(x, &|at| rotor.loads(at)),
+            rough: &|x| look(x, &|at| rotor.rough_loads_near(at, &mut trail.elements.borrow_mut())),
+            exact: &|x| look(x, &|at| rotor.loads_near(at, &mut trail.elements.borrow_mut())),
             range,
         };
         let guess = trail.guess(free, self.at.airspeed_m_s, &search.range);
@@ -148,7 +148,7 @@ impl Demand<'_> {
         let here = seen.steepness();
         let steepness = here.or_else(|| trail.steepness(free));
         let led = steepness.and_then(|along| seen.loads_at(root.x, along, LAST_STEP * width));
-        let loads = led.unwrap_or_else(|| rotor.loads(&condition));
+        let loads = led.unwrap_or_else(|| rotor.loads_near(&condition, &mut trail.elements.borrow_mut()));
         Ok(Met { condition, loads, free, root, above_rough, width, steepness, measured: here.is_some() })
     }
 

@@ -1,9 +1,11 @@
 //! Answers at neighbouring speeds, from which the next is guessed.
 
+use std::cell::RefCell;
 use std::ops::RangeInclusive;
 
 use super::root::{Root, Search};
 use super::settle::{Free, Met, Steepness};
+use crate::rotor::Neighbour;
 
 /// Answers a guess is made of.
 const MOST: usize = 4;
@@ -16,6 +18,8 @@ const TRUSTED: f64 = 1e-3;
 #[derive(Clone, Debug, Default)]
 pub(super) struct Trail {
     past: Vec<(f64, Met)>,
+    /// What is known of the elements where they were last looked at.
+    pub(super) elements: RefCell<Neighbour>,
     /// Whether the last guess was good.
     trusted: bool,
     /// How many answers were found at once since the slope was last measured.
@@ -30,7 +34,7 @@ impl Trail {
         let free = past.first().map(|(_, met)| met.free);
         past.retain(|(_, met)| Some(met.free) == free);
         past.truncate(MOST);
-        Self { trusted: past.len() == MOST, past, unmeasured: 0 }
+        Self { trusted: past.len() == MOST, past, ..Self::default() }
     }
 
     /// The last answer.

@@ -11,6 +11,10 @@
 //! Where the residual has several roots, the one of least `|α|` counts: it is found by marching outward from
 //! α = 0 and needs no history.
 
+mod near;
+
+pub use near::Near;
+
 use std::f64::consts::{FRAC_PI_2, PI};
 
 use roots::{SimpleConvergency, find_root_brent};
@@ -126,6 +130,19 @@ const STEEP: f64 = 0.75;
 const CONVERGED: f64 = 1e-12;
 const MOST_PASSES: usize = 100;
 
+/// V and Ω r over `hypot(V, Ω r)`.
+struct Flow {
+    turning: f64,
+    axial: f64,
+}
+
+impl Flow {
+    /// The residual R(φ) over `hypot(V, Ω r)`.
+    fn residual(&self, t: &Terms) -> f64 {
+        self.turning * t.n - self.axial * t.m
+    }
+}
+
 struct Terms {
     sin: f64,
     cos: f64,
@@ -143,13 +160,10 @@ impl Element<'_> {
         if self.ends.bare() {
             return None;
         }
-        let lookups = std::cell::Cell::new(1);
-        let speed = self.axial_m_s.hypot(self.turning_m_s);
-        let (turning, axial) = (self.turning_m_s / speed, self.axial_m_s / speed);
+        let (lookups, flow) = (std::cell::Cell::new(1), self.flow());
         let residual = |phi: f64| {
             lookups.set(lookups.get() + 1);
-            let t = self.terms(phi);
-            turning * t.n - axial * t.m
+            flow.residual(&self.terms(phi))
         };
         let (brackets, count) = self.brackets();
         let phi = brackets[..count].iter().find_map(|&(lo, hi)| self.nearest_root(lo, hi, &residual))?;
@@ -164,17 +178,19 @@ impl Element<'_> {
             return None;
         }
         let section = self.section.at(alpha_rad);
-        let speed = self.axial_m_s.hypot(self.turning_m_s);
-        let residual = |phi: f64| {
-            let t = self.terms_with(phi, section);
-            (self.turning_m_s * t.n - self.axial_m_s * t.m) / speed
-        };
+        let flow = self.flow();
+        let residual = |phi: f64| flow.residual(&self.terms_with(phi, section));
         if !(residual(NEAR_ZERO_RAD) < 0.0 && residual(FRAC_PI_2) > 0.0) {
             return None;
         }
         let mut rule = SimpleConvergency { eps: CONVERGED, max_iter: MOST_PASSES };
         let phi = find_root_brent(NEAR_ZERO_RAD, FRAC_PI_2, residual, &mut rule).ok()?;
         Some(Self { angle_rad: phi + alpha_rad, ..*self }.balanced(phi, 1))
+    }
+
+    fn flow(&self) -> Flow {
+        let speed = self.axial_m_s.hypot(self.turning_m_s);
+        Flow { turning: self.turning_m_s / speed, axial: self.axial_m_s / speed }
     }
 
     fn terms(&self, phi: f64) -> Terms {
@@ -223,8 +239,9 @@ impl Element<'_> {
     fn nearest_root(&self, lo: f64, hi: f64, residual: &impl Fn(f64) -> f64) -> Option<f64> {
         let start = self.angle_rad.clamp(lo, hi);
         let at_start = residual(start);
-        let down = (self.angle_rad - STEEP * self.section.stall_rad().max(0.0)).clamp(lo, start);
-        let up = (self.angle_rad - STEEP * self.section.negative_stall_rad().min(0.0)).clamp(start, hi);
+        let (steep_down, steep_up) = self.steep_rad();
+        let (down, up) =
+            ((self.angle_rad - steep_up).clamp(lo, start), (self.angle_rad - steep_down).clamp(start, hi));
         // The residual rises through the wanted root: look where it should be first.
         let sides = if at_start > 0.0 { [(down, lo), (up, hi)] } else { [(up, hi), (down, lo)] };
         let mut best: Option<f64> = None;
@@ -238,6 +255,12 @@ impl Element<'_> {
             best = found.filter(nearer).or(best);
         }
         best
+    }
+
+    /// The angles of attack, one not above and one not below zero, between which lift rises steeply, rad.
+    fn steep_rad(&self) -> (f64, f64) {
+        let (down, up) = (self.section.negative_stall_rad(), self.section.stall_rad());
+        (STEEP * down.min(0.0), STEEP * up.max(0.0))
     }
 
     /// The first root going from `start` over `window` in one look, then in steps to `end` or past `reach` from α = 0.
@@ -272,7 +295,10 @@ impl Element<'_> {
     }
 
     fn balanced(&self, phi: f64, lookups: u32) -> Balance {
-        let t = self.terms(phi);
+        self.balanced_by(phi, &self.terms(phi), lookups)
+    }
+
+    fn balanced_by(&self, phi: f64, t: &Terms, lookups: u32) -> Balance {
         let four_fs = 4.0 * t.loss * t.sin.abs();
         let (a, c) = (t.n / four_fs, t.m / four_fs);
         let speed = (self.axial_m_s * a + self.turning_m_s * c) / (a * a + c * c);

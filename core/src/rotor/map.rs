@@ -2,7 +2,7 @@
 
 use ndarray::Array2;
 
-use super::element::Balance;
+use super::element::{Balance, Near};
 use super::{Condition, Ring, Rotor};
 use crate::section::{Best, best};
 
@@ -40,9 +40,10 @@ pub fn departure_map(rotor: &Rotor, line: &[Condition], radii_m: &[f64]) -> Depa
     for (mut row, &radius) in cells.rows_mut().into_iter().zip(radii_m) {
         let ring = rotor.ring(radius);
         let bests = BestLine::new(rotor, &ring, line);
+        let mut near = Near::default();
         for (i, (cell, at)) in row.iter_mut().zip(line).enumerate() {
             let element = rotor.element(&ring, at).0;
-            if let Some(balance) = element.balance() {
+            if let Some(balance) = element.balance_near(&mut near) {
                 *cell = filled(&balance, bests.at(i), element.section.stall_rad());
             }
         }

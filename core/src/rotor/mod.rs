@@ -23,7 +23,7 @@ use crate::air::Air;
 use crate::blade::{Blade, Cut};
 use crate::job::Method;
 use crate::section::{Local, Situation};
-use element::{Balance, Blend, Element};
+use element::{Balance, Blend, Element, Near};
 use loss::Ends;
 
 /// One steady condition of a propeller.
@@ -99,6 +99,13 @@ pub struct Rotor {
     rings: Vec<Ring>,
     /// Few elements, for a first look.
     rough_rings: Vec<Ring>,
+}
+
+/// What is known of every element of a propeller at a neighbouring condition.
+#[derive(Clone, Debug, Default)]
+pub struct Neighbour {
+    all: Vec<Near>,
+    few: Vec<Near>,
 }
 
 /// Elements of a first look.
@@ -182,7 +189,7 @@ impl Rotor {
     /// Thrust and torque at a condition.
     #[must_use]
     pub fn loads(&self, at: &Condition) -> Loads {
-        self.sum(&self.rings, at)
+        self.sum(&self.rings, at, |_, element| element.balance())
     }
 
     /// How thrust and torque are spread over the elements, from hub to tip; elements without a balance are left out.
@@ -208,13 +215,35 @@ impl Rotor {
     /// The same by few elements: within some per cent, for a first look.
     #[must_use]
     pub fn rough_loads(&self, at: &Condition) -> Loads {
-        self.sum(&self.rough_rings, at)
+        self.sum(&self.rough_rings, at, |_, element| element.balance())
     }
 
-    fn sum(&self, rings: &[Ring], at: &Condition) -> Loads {
+    /// The loads, equal to within rounding, found from those of a neighbouring condition, with less work; keeps what the next may need.
+    #[must_use]
+    pub fn loads_near(&self, at: &Condition, near: &mut Neighbour) -> Loads {
+        self.sum_near(&self.rings, at, &mut near.all)
+    }
+
+    /// The same by few elements.
+    #[must_use]
+    pub fn rough_loads_near(&self, at: &Condition, near: &mut Neighbour) -> Loads {
+        self.sum_near(&self.rough_rings, at, &mut near.few)
+    }
+
+    fn sum_near(&self, rings: &[Ring], at: &Condition, near: &mut Vec<Near>) -> Loads {
+        near.resize(rings.len(), Near::default());
+        self.sum(rings, at, |i, element| element.balance_near(&mut near[i]))
+    }
+
+    fn sum(
+        &self,
+        rings: &[Ring],
+        at: &Condition,
+        mut balance: impl FnMut(usize, &Element) -> Option<Balance>,
+    ) -> Loads {
         let mut sum = Loads::default();
-        for ring in rings {
-            match self.element(ring, at).0.balance() {
+        for (i, ring) in rings.iter().enumerate() {
+            match balance(i, &self.element(ring, at).0) {
                 Some(balance) => {
                     let (thrust, torque) = self.grading(ring, at, &balance);
                     sum.thrust_n += thrust * ring.width_m;

@@ -134,3 +134,44 @@ fn on_shipped_tables_the_march_and_the_scan_nearly_always_agree() {
     }
     assert!(tried > 900 && differ <= 10, "{differ} of {tried} differ");
 }
+
+/// What a neighbour tells: the angle of attack a little off, the rise not known.
+fn told(balance: &Balance, off_deg: f64) -> Near {
+    Near::at(balance.alpha_rad + off_deg.to_radians())
+}
+
+proptest! {
+    #![proptest_config(ProptestConfig::with_cases(1500))]
+
+    #[test]
+    fn from_a_neighbour_the_same_root_is_found(s in situations(), off_deg in -3.0..3.0f64) {
+        let family = plate_polar();
+        let e = element(&family, s);
+        if let Some(found) = e.balance() {
+            let mut near = told(&found, off_deg);
+            let again = e.balance_near(&mut near).expect("an element in balance stays so");
+            prop_assert!((again.inflow_rad - found.inflow_rad).abs() < 1e-9, "{again:?} {found:?}");
+            let once_more = e.balance_near(&mut near).expect("and again");
+            prop_assert!((once_more.inflow_rad - found.inflow_rad).abs() < 1e-9);
+        }
+    }
+}
+
+#[test]
+fn on_shipped_tables_a_neighbour_leads_to_the_same_root_in_half_the_lookups() {
+    let family = library().family("clark-y", 9.0).unwrap();
+    let mut runner = proptest::test_runner::TestRunner::deterministic();
+    let (mut cold, mut warm) = (0, 0);
+    for _ in 0..2000 {
+        let (v, turning, ..) = situations().new_tree(&mut runner).unwrap().current();
+        let ends = Ends::new(2.0, 0.7, 1.0, 0.15, true);
+        let angle = (v / turning).atan().to_degrees() + 5.0;
+        let e = element(family, (v, turning, angle, 0.05, ends));
+        let found = e.balance().expect("an ordinary element has a balance");
+        let again = e.balance_near(&mut told(&found, 0.2)).expect("so has it again");
+        assert!((again.inflow_rad - found.inflow_rad).abs() < 1e-9, "{again:?} {found:?}");
+        (cold, warm) = (cold + found.lookups, warm + again.lookups);
+    }
+    println!("{cold} lookups, {warm} from a neighbour");
+    assert!(2 * warm < cold, "{warm} of {cold}");
+}
