@@ -6,9 +6,9 @@
 //! propeller holds its rpm and turns its blades between its stops instead; at a stop it is a fixed one.
 
 use crate::air::Air;
-use crate::aircraft::thrust_asked_n;
+use crate::aircraft::{speeds, thrust_asked_n};
 use crate::engine::Shaft;
-use crate::job::{FlightPoint, Setting};
+use crate::job::{Aircraft, FlightPoint, Setting};
 use crate::result::State;
 use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, Loads};
@@ -67,8 +67,20 @@ pub fn condition(rig: &Rig, point: &FlightPoint, air: Air) -> Result<Condition, 
         Setting::FullThrottle {} if point.airspeed_m_s.is_none() => top_speed::condition(rig, &at),
         Setting::FullThrottle {} => throttle_condition(rig, &at, 1.0),
         Setting::Throttle { fraction } => throttle_condition(rig, &at, fraction),
-        Setting::Level {} => Solver::new(rig).level(&at, &Trail::default()).map(|met| met.condition),
+        Setting::Level {} => {
+            let met = Solver::new(rig).level(&at, &Trail::default());
+            met.map(|met| met.condition)
+                .map_err(|state| if stalled(rig, point, &air) { State::BelowStall } else { state })
+        }
     }
+}
+
+/// Whether a flight point asks an aeroplane for level flight slower than its stall.
+#[must_use]
+pub fn stalled(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
+    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return false };
+    let stall = speeds(a, air).stall_m_s;
+    point.setting == Setting::Level {} && stall.is_some_and(|stall| point.airspeed_m_s.unwrap_or(0.0) < stall)
 }
 
 /// The condition at which the engine at a throttle setting turns the propeller, at the speed and air of `at`.
@@ -186,6 +198,6 @@ impl<'r> Solver<'r> {
         }
         let taken = power_w(&met.loads, &met.condition);
         let given = shaft.power_w(rpm, &met.condition.air, 1.0);
-        if taken > given { Err(State::OutOfReach) } else { Ok(()) }
+        if taken > given { Err(State::EngineTooWeak) } else { Ok(()) }
     }
 }

@@ -69,9 +69,11 @@ pub enum State {
     EngineCannotTurnIt,
     /// The propeller would turn faster than the engine's curve or limit.
     OverLimitRpm,
-    /// No rpm within limits absorbs the power or gives the thrust asked for.
+    /// Some rpm gives the thrust of level flight, but the engine does not have the power for it there.
+    EngineTooWeak,
+    /// No rpm up to a tip Mach number of 1.2 absorbs the power or gives the thrust asked for.
     OutOfReach,
-    /// Slower than the stall; said of level flight in an envelope.
+    /// Slower than the stall, and not to be flown level; in an envelope said of every level flight slower than the stall.
     BelowStall,
 }
 
@@ -87,7 +89,10 @@ impl State {
             Self::OverLimitRpm => {
                 "The propeller would run past the engine's limit rpm, or past the last point of its power curve."
             }
-            Self::OutOfReach => "No rpm gives what is asked for.",
+            Self::EngineTooWeak => {
+                "Level flight takes more power here than the engine gives at full throttle."
+            }
+            Self::OutOfReach => "No rpm of this propeller gives what is asked for, whatever the engine.",
             Self::BelowStall => "Slower than the stall: the wing does not carry the aeroplane.",
         }
     }
@@ -116,6 +121,8 @@ pub enum Note {
     NoLoadAtEnd,
     /// Full throttle would pass the limit rpm; [`PointResult::held`] is throttled back to it.
     HeldAtLimitRpm,
+    /// Level flight slower than the stall.
+    BelowStall,
 }
 
 impl Note {
@@ -131,6 +138,7 @@ impl Note {
             Self::Windmilling => "driven by the air",
             Self::NoBalance => "no balance found, no load counted",
             Self::NoLoadAtEnd => "at the end of the blade or inside the hub, no load",
+            Self::BelowStall => "slower than the stall, the wing does not carry the aeroplane",
             Self::HeldAtLimitRpm => "throttled back to hold the limit rpm",
         }
     }

@@ -88,6 +88,7 @@ impl Rig {
             Ok(at) => {
                 let mut result = report::point(&self.rotor, point, &at);
                 result.meeting = fit::meeting(self, &at, &result.figures);
+                result.notes.extend(fit::stalled(self, point, &air).then_some(Note::BelowStall));
                 result
             }
             Err(state) => {

@@ -78,7 +78,7 @@ fn what_has_no_answer_says_why() {
     let Some(Engine::Piston(piston)) = &mut weak.engine else { panic!("a piston engine") };
     piston.full_throttle.iter_mut().for_each(|p| p.power_w /= 20.0);
     assert_eq!(at(&weak, Some(0.0), Setting::FullThrottle {}).state, State::EngineCannotTurnIt);
-    assert_eq!(at(&weak, Some(45.0), Setting::Level {}).state, State::OutOfReach);
+    assert_eq!(at(&weak, Some(45.0), Setting::Level {}).state, State::EngineTooWeak);
 
     let mut fine = demo(0);
     fine.propeller.stations.iter_mut().for_each(|s| s.angle_deg = s.angle_deg.map(|a| a - 9.0));
@@ -93,7 +93,7 @@ fn what_has_no_answer_says_why() {
     assert_eq!(at(&bare, Some(45.0), Setting::Level {}).state, State::NeedsAircraft);
     assert_eq!(
         at(&demo(0), Some(0.0), Setting::Level {}).state,
-        State::OutOfReach,
+        State::BelowStall,
         "nothing holds it up at rest"
     );
 }

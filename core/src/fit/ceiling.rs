@@ -26,9 +26,12 @@ const CONVERGED_M: f64 = 0.5;
 pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
     rig.shaft.as_ref()?;
+    let best = |h: f64| best_climb_m_s(rig, a, h, isa_offset_k);
+    let (lowest, highest) = (best(0.0), best(HIGHEST_M));
     let spare = |above: f64| {
-        let climb = move |h: f64| best_climb_m_s(rig, a, h, isa_offset_k).map_or(-1.0, |c| c - above);
-        let (low, high) = (climb(0.0), climb(HIGHEST_M));
+        let over = |climb: Option<f64>| climb.map_or(-1.0, |c| c - above);
+        let climb = |h: f64| over(best(h));
+        let (low, high) = (over(lowest), over(highest));
         if low <= 0.0 || high >= 0.0 {
             return None;
         }
@@ -36,7 +39,7 @@ pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
         let mut rest = |h: f64| if h == 0.0 { 1e3 * low } else { 1e3 * climb(h) };
         find_root_brent(0.0, HIGHEST_M, &mut rest, &mut rule).ok()
     };
-    Some(Ceilings { service_m: spare(SERVICE_M_S), absolute_m: spare(0.0) })
+    Some(Ceilings { service_m: spare(SERVICE_M_S), absolute_m: spare(0.0), sea_level_climb_m_s: lowest })
 }
 
 /// The best rate of climb at full throttle at a height, held to the limit rpm; `None` where there is no answer at any

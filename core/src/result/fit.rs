@@ -184,13 +184,15 @@ pub struct TakeOff {
     pub distance_to_15_m: f64,
 }
 
-/// Pressure altitudes that full throttle reaches; `None` above 20 km or below sea level.
+/// Pressure altitudes that full throttle reaches.
 #[derive(Clone, Copy, Debug, PartialEq, Serialize)]
 pub struct Ceilings {
-    /// Where the best rate of climb is 0.5 m/s, m.
+    /// Where the best rate of climb is 0.5 m/s, m; `None` below sea level or above the atmosphere's table.
     pub service_m: Option<f64>,
-    /// Where it is nothing, m.
+    /// Where it is nothing, m; `None` as above.
     pub absolute_m: Option<f64>,
+    /// Best rate of climb at sea level, m/s; `None` where full throttle has no answer there.
+    pub sea_level_climb_m_s: Option<f64>,
 }
 
 /// The figure that a better pitch betters.

@@ -128,6 +128,12 @@ impl SettingKind {
         }
     }
 
+    /// What it is called for an aircraft that hovers.
+    #[must_use]
+    pub fn hovering_words(self) -> &'static str {
+        if self == Self::Level { "hover or steady climb" } else { self.words() }
+    }
+
     /// What it is called.
     #[must_use]
     pub fn words(self) -> &'static str {

@@ -2,6 +2,7 @@
 
 use std::rc::Rc;
 
+use spokeshave::job::Aircraft;
 use yew::prelude::*;
 
 use super::blade::{BladeSettings, StationTable, in_a_line};
@@ -133,7 +134,9 @@ fn limit_rpm(later: &Later) -> Option<f64> {
 }
 
 fn same_points(a: &State, b: &State) -> bool {
+    let hovers = |s: &State| matches!(s.job().aircraft, Some(Aircraft::Multirotor(_)));
     a.job().flight_points == b.job().flight_points
+        && hovers(a) == hovers(b)
         && a.drafts == b.drafts
         && a.point == b.point
         && a.units == b.units

@@ -2,7 +2,7 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::FlightPoint;
+use spokeshave::job::{Aircraft, FlightPoint};
 use spokeshave::result::{PointResult, State as Answer};
 use yew::prelude::*;
 
@@ -102,13 +102,14 @@ fn PointRow(props: &PointRowProps) -> Html {
     let messages = boxes.iter().filter(|s| s.message.is_some());
     let messages = messages.map(|s| html! { <Message shown={s.clone()} named=true /> }).collect::<Html>();
     let wrong = boxes.iter().any(|s| s.message.is_some());
+    let hovers = matches!(state.job().aircraft, Some(Aircraft::Multirotor(_)));
     html! {
         <>
             <tr class={classes!((i == state.point).then_some("selected"))}>
                 <th scope="row"><Entry shown={boxes[0].clone()} is_text=true class="name" /></th>
                 { for boxes[1..3].iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
                 <td><Entry shown={boxes[3].clone()} hint={top_speed(state.units, props.result.as_ref().as_ref())} /></td>
-                <td><SettingPick index={i} point={point.clone()} result={props.result.clone()} /></td>
+                <td><SettingPick index={i} point={point.clone()} {hovers} result={props.result.clone()} /></td>
                 <td class="setting">{ setting_box(point, &boxes[4]) }</td>
                 <PointAnswer result={props.result.clone()} units={state.units} />
                 <td>
@@ -136,6 +137,8 @@ fn setting_box(point: &FlightPoint, shown: &Shown) -> Html {
 struct SettingPickProps {
     index: usize,
     point: FlightPoint,
+    /// Whether the aircraft hovers.
+    hovers: bool,
     result: Rc<Option<PointResult>>,
 }
 
@@ -146,7 +149,8 @@ fn SettingPick(props: &SettingPickProps) -> Html {
     let running = (*props.result)
         .as_ref()
         .map_or_else(Running::default, |r| Running { rpm: r.rpm, power_w: r.figures.power_w });
-    let options: Vec<AttrValue> = SettingKind::ALL.iter().map(|k| AttrValue::from(k.words())).collect();
+    let words = if props.hovers { SettingKind::hovering_words } else { SettingKind::words };
+    let options: Vec<AttrValue> = SettingKind::ALL.iter().map(|k| words(*k).into()).collect();
     let picked = SettingKind::ALL.iter().position(|k| *k == SettingKind::of(&props.point.setting));
     let onpick =
         act.on(move |k: usize| Action::Choose(Choice::Setting(i, SettingKind::ALL[k.min(4)]), running));

@@ -4,7 +4,7 @@ use std::rc::Rc;
 
 use spokeshave::drawn::DrawnStation;
 use spokeshave::fit::Along;
-use spokeshave::job::{Rotation, Section};
+use spokeshave::job::{Aircraft, Rotation, Section};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rotor::DepartureMap;
 use spokeshave::section::library;
@@ -146,13 +146,17 @@ fn same_map(a: &State, b: &State) -> bool {
 
 /// What the map follows, to pick from; nothing where there is no choice.
 fn along(act: &Act, state: &State) -> Html {
-    const ALL: [(Along, &str); 2] = [(Along::FullThrottle, "full throttle"), (Along::Level, "level flight")];
+    let level = match state.job().aircraft {
+        Some(Aircraft::Multirotor(_)) => "hover and climb",
+        _ => "level flight",
+    };
+    let all = [(Along::FullThrottle, "full throttle"), (Along::Level, level)];
     if state.job().aircraft.is_none() && state.along == Along::FullThrottle {
         return html! {};
     }
-    let options = ALL.iter().map(|(_, words)| AttrValue::from(*words)).collect::<Vec<_>>();
-    let picked = ALL.iter().position(|(to, _)| *to == state.along);
-    let onpick = act.on(|i: usize| Action::Along(ALL[i.min(1)].0));
+    let options = all.iter().map(|(_, words)| AttrValue::from(*words)).collect::<Vec<_>>();
+    let picked = all.iter().position(|(to, _)| *to == state.along);
+    let onpick = act.on(move |i: usize| Action::Along(all[i.min(1)].0));
     html! { <Pick label="The map follows" {options} {picked} {onpick} bare=true /> }
 }
 

@@ -1,5 +1,6 @@
 //! The figures of the speed range that decide.
 
+use spokeshave::air::HIGHEST_M;
 use spokeshave::result::{Ceilings, Envelope, Mark, TakeOff};
 use yew::prelude::*;
 
@@ -73,12 +74,20 @@ fn take_off(units: Units, take_off: Option<TakeOff>) -> Cell {
 }
 
 fn ceiling(units: Units, ceilings: Option<Ceilings>) -> Cell {
-    let absolute = ceilings.and_then(|c| c.absolute_m);
+    let height = |m| with_unit(units, Quantity::Height, Some(m));
+    let more = match ceilings {
+        None => "worked out last".into(),
+        Some(Ceilings { absolute_m: Some(m), .. }) => format!("no climb left at {}", height(m)),
+        Some(Ceilings { sea_level_climb_m_s: Some(climb), .. }) if climb > 0.0 => {
+            format!("climb is left at {}, where the air's table ends", height(HIGHEST_M))
+        }
+        Some(_) => "no climb even at sea level".into(),
+    };
     Cell {
         name: "Ceiling at 0.5 m/s climb",
         figure: figure(units, Quantity::Height, ceilings.and_then(|c| c.service_m)),
         unit: units.symbol(Quantity::Height),
-        more: format!("no climb left at {}", with_unit(units, Quantity::Height, absolute)),
+        more,
     }
 }
 
