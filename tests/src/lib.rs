@@ -3,7 +3,9 @@
 #![forbid(unsafe_code)]
 
 pub mod browser;
+pub mod formula;
 pub mod page;
 pub mod reference;
 pub mod tools;
 pub mod tunnel;
+pub mod wood_case;
