@@ -35,8 +35,19 @@ impl Shaft {
     pub fn new(engine: &Engine, engines: f64) -> Option<Self> {
         match engine {
             Engine::Piston(p) => PistonShaft::new(p).map(Self::Piston),
-            Engine::Electric(e) => Some(Self::Electric(ElectricShaft { data: e.clone(), motors: engines })),
+            Engine::Electric(e) => {
+                Some(Self::Electric(ElectricShaft { data: e.clone(), motors: engines, rounding_a: 0.0 }))
+            }
         }
+    }
+
+    /// The same with the corner at a motor's current limit rounded off over a share of it, on the safe side: what follows from it then
+    /// changes smoothly with the propeller. `None` where there is no such corner.
+    #[must_use]
+    pub fn rounded(&self, share: f64) -> Option<Self> {
+        let Self::Electric(e) = self else { return None };
+        let rounding_a = share * e.data.max_current_a?;
+        Some(Self::Electric(ElectricShaft { rounding_a, ..e.clone() }))
     }
 
     /// Lowest and highest propeller rpm for which there is a full-throttle power.

@@ -28,6 +28,7 @@ mod line;
 mod marks;
 mod matched;
 mod meeting;
+mod near;
 mod offer;
 mod root;
 mod settle;
@@ -44,8 +45,9 @@ pub use held::held;
 pub use line::{Along, level_line, line};
 pub use matched::matched;
 pub use meeting::meeting;
+pub use near::{Answer, Near, answer};
 pub use offer::{Offer, offer, offer_crossings};
-pub use take_off::take_off;
+pub use take_off::{take_off, take_off_in};
 pub use worth::pitch_worth;
 
 /// Fastest tip considered where no engine sets a limit, as a Mach number.
@@ -89,6 +91,16 @@ pub fn stalled(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
 /// No engine; the engine too weak; the rpm past its limit or curve.
 pub fn throttle_condition(rig: &Rig, at: &Condition, throttle: f64) -> Result<Condition, State> {
     Solver::new(rig).throttle(at, throttle, &Trail::default()).map(|met| met.condition)
+}
+
+/// What the engine has to spare at a condition at which the propeller takes a power, W: of its rpm limit as a share of it, and of
+/// power as a share of what is taken. Below zero is short; `None` without an engine.
+#[must_use]
+pub fn spare(rig: &Rig, at: &Condition, taken_w: f64) -> Option<(f64, f64)> {
+    let shaft = rig.shaft.as_ref()?;
+    let (rpm, highest) = (rpm_of(at), highest_rpm(shaft));
+    let given_w = shaft.power_w(rpm.min(highest), &at.air, 1.0);
+    Some((1.0 - rpm / highest, (given_w - taken_w) / taken_w.max(1e-9)))
 }
 
 /// What the propeller takes at a condition, W.

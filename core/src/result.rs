@@ -6,18 +6,23 @@ use serde::Serialize;
 mod carved;
 mod chart;
 mod fit;
+mod limit;
+mod search;
 mod shape;
 mod strength;
 
+pub use crate::job::Figure;
 pub use carved::{
     Carved, CarvedBlade, CarvedPoint, CarvedStation, Doubt, Known, LoadOf, MassOf, OncePerTurn, PlannedBlade,
     PlannedStation, Read, RemovalPlan, StaticBalance, StationDeparture,
 };
-pub use chart::{ChartCell, Cost, ErrorCosts, Figure, Limit, Margin, PitchDiameter, Tolerance};
+pub use chart::{ChartCell, Cost, ErrorCosts, PitchDiameter, Tolerance};
 pub use fit::{
     Ceilings, Crossing, Envelope, EnvelopePoint, Fit, FullThrottle, HeldAtLimit, Level, Mark, Marks,
     PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,
 };
+pub use limit::{Limit, Margin};
+pub use search::{AimResult, FreeValue, Search, Stopped};
 pub use shape::{Bound, Brief, Compared, LeastLoss, LossStation, Origin, Twist, TwistStation};
 pub use strength::{
     CaseFigures, CaseKind, CaseResult, FrequencyLine, Governing, HubResult, Mass, MaterialUsed, ModeKind,

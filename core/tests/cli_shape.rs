@@ -42,3 +42,46 @@ fn what_has_no_answer_ends_with_1_and_bad_input_with_2() {
         assert_eq!(shape(bad).status.code(), Some(2), "{bad:?}");
     }
 }
+
+#[test]
+fn a_search_takes_wishes_limits_and_what_is_held_on_the_command_line() {
+    let asked = ["search", "--aim", "Cruise:efficiency=2", "--aim", "climb:climb", "--hold", "diameter"];
+    let limits = ["--rpm", "Cruise=2000..2900", "--standing-rpm-least", "2500", "--tip-mach-most", "0.8"];
+    let all = [&asked[..], &limits, &["--most-trials", "60"]].concat();
+    let people = shape(&all);
+    assert_eq!(people.status.code(), Some(0), "{}", err(&people));
+    let text = out(&people);
+    assert!(text.contains("greatest number of blades") && text.contains("to spare"), "{text}");
+    let json: Value = serde_json::from_str(&out(&shape(&[&all[..], &["--json"]].concat()))).unwrap();
+    assert_eq!(json["aims"][0]["weight"], 2.0);
+    assert!(json["free"].as_array().unwrap().iter().all(|f| f["name"] != "diameter"));
+    let job = Job::from_json(&out(&shape(&[&all[..], &["--job"]].concat()))).unwrap();
+    assert!(job.title.ends_with("(search)"));
+    for (bad, words) in [
+        (&["search", "--aim", "Cruise:beauty"][..], "allowed are efficiency"),
+        (&["search", "--aim", "Moon:power"], "no flight point"),
+        (&["search", "--tip-mach-most", "7"], "wishes.limits.tip_mach_most: 7"),
+        (&["search", "--start", "0,2"], "figures from -1 to 1"),
+    ] {
+        let o = shape(bad);
+        assert_eq!(o.status.code(), Some(2), "{bad:?}");
+        assert!(err(&o).contains(words), "{}", err(&o));
+    }
+    let o = shape(&["search", "--diameter-most-mm", "800", "--most-trials", "100"]);
+    assert_eq!(o.status.code(), Some(1));
+    assert!(err(&o).contains("diameter") && err(&o).contains("past the limit"), "{}", err(&o));
+}
+
+#[test]
+fn a_chart_is_told_for_people_and_for_programs() {
+    let asked = ["chart", "--point", "Cruise", "--pitch-mm", "1100..1400:4", "--diameter-mm", "1400..1600:3"];
+    let limited = [&asked[..], &["--shaft-height-mm", "1000", "--ground-clearance-mm", "230"]].concat();
+    let text = out(&shape(&limited));
+    assert!(text.contains("drawn: pitch") && text.contains('*'), "{text}");
+    let csv = out(&shape(&[&limited[..], &["--csv"]].concat()));
+    assert_eq!(csv.lines().count(), 13, "{csv}");
+    assert_eq!(csv.lines().filter(|l| l.ends_with("diameter-most")).count(), 4, "{csv}");
+    let json: Value = serde_json::from_str(&out(&shape(&[&asked[..], &["--json"]].concat()))).unwrap();
+    assert_eq!(json["cells"].as_array().unwrap().len(), 4);
+    assert_eq!(shape(&["chart", "--pitch-mm", "wide"]).status.code(), Some(2));
+}

@@ -1,11 +1,11 @@
 //! Shaped blades keep their promises when they are analysed anew.
 
-use spokeshave::job::{AngleReference, DEMOS, Job, PitchControl, Setting};
+use spokeshave::job::{AngleReference, DEMOS, Job, Limits, PitchControl, Setting};
 use spokeshave::result::{Brief, Figure, Limit, Origin, State, Tolerance};
 use spokeshave::rig::Rig;
 use spokeshave::shape::adkins_liebeck::Wanted;
 use spokeshave::shape::{
-    Lift, Limits, LossTask, PitchBy, ShapeError, brief, error_costs, least_loss, pitch_diameter, twist,
+    Lift, LossTask, PitchBy, ShapeError, brief, error_costs, least_loss, pitch_diameter, twist,
 };
 
 fn demo(index: usize) -> Rig {

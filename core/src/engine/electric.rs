@@ -10,6 +10,8 @@ pub struct ElectricShaft {
     pub(super) data: Electric,
     /// Equal motors on the battery, which sags under the current of all.
     pub(super) motors: f64,
+    /// By how much the current limit is rounded off, A; 0 is the limit itself.
+    pub(super) rounding_a: f64,
 }
 
 /// The electric side at one shaft load.
@@ -23,6 +25,12 @@ pub struct Electrics {
     pub battery_voltage_v: f64,
     /// Duty of the controller, 0 to 1.
     pub duty: f64,
+}
+
+/// The lesser of two, the corner between them rounded off over a width.
+fn rounded_least(a: f64, b: f64, width: f64) -> f64 {
+    let least = a.min(b);
+    if width > 0.0 { least - width * (-(a - b).abs() / width).exp().ln_1p() } else { least }
 }
 
 impl ElectricShaft {
@@ -53,7 +61,8 @@ impl ElectricShaft {
         let back_v = motor_rpm / self.data.kv_rpm_per_v;
         let current =
             (duty * self.open_circuit_v() - back_v) / (self.motor_ohm() + duty * duty * self.battery_ohm());
-        let held = current.min(self.data.max_current_a.unwrap_or(f64::INFINITY));
+        let held =
+            self.data.max_current_a.map_or(current, |most| rounded_least(current, most, self.rounding_a));
         self.torque_per_a() * (held - self.data.no_load_current_a) * motor_rpm * PI / 30.0
     }
 

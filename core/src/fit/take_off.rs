@@ -4,13 +4,16 @@
 //! m at 1.3 of the stall speed; level hard ground, no wind. The roll is `∫ V dV/a`, `a = (T − q S cd0 − μ W)/m`; from
 //! there to 15 m it is by energy: the height and the gain of speed over the mean of `(T − D)/W`.
 
+use super::Solver;
 use super::slipstream::kept_share;
-use crate::air::G0_M_S2;
-use crate::aircraft::{drag_n, weight_n};
+use super::trail::Trail;
+use crate::air::{Air, G0_M_S2};
+use crate::aircraft::{drag_n, speeds};
 use crate::curve::Curve;
 use crate::job::{Aeroplane, Aircraft};
 use crate::result::{Envelope, TakeOff};
 use crate::rig::Rig;
+use crate::rotor::Condition;
 
 /// Rolling friction over weight where the job gives none: short grass or firm ground; common practice gives 0.02
 /// (hard runway) to 0.1 (long grass).
@@ -20,25 +23,46 @@ const SCREEN: f64 = 1.3;
 const SCREEN_M: f64 = 15.0;
 /// Steps of the integral over speed, by the midpoint rule.
 const STEPS: u32 = 200;
+/// Speeds of a quick look.
+const FEW: u32 = 6;
 
 /// Take-off at the air of an envelope. `None` without an aeroplane with a greatest lift coefficient, and where thrust
 /// does not suffice to get there.
 #[must_use]
 pub fn take_off(rig: &Rig, envelope: &Envelope) -> Option<TakeOff> {
-    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
-    let stall = envelope.speeds?.stall_m_s?;
+    let air = Air::standard(envelope.altitude_m, envelope.isa_offset_k).ok()?;
     let kept = kept_share(rig);
     let known =
         envelope.points.iter().filter_map(|p| Some((p.airspeed_m_s, kept * p.full.as_ref()?.thrust_n)));
-    let (speed, thrust): (Vec<f64>, Vec<f64>) = known.unzip();
+    along(rig, &air, known.unzip())
+}
+
+/// The same without an envelope, from full throttle at few speeds.
+#[must_use]
+pub fn take_off_in(rig: &Rig, air: &Air) -> Option<TakeOff> {
+    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
+    let (solver, mut trail) = (Solver::new(rig), Trail::default());
+    let (kept, engines) = (kept_share(rig), f64::from(a.engines));
+    let fastest = SCREEN * speeds(a, air).stall_m_s?;
+    let thrust = |i: u32| {
+        let airspeed_m_s = fastest * (f64::from(i) / f64::from(FEW));
+        let at = Condition { air: *air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+        Some((airspeed_m_s, kept * engines * solver.full(&at, &mut trail).ok()?.loads.thrust_n))
+    };
+    along(rig, air, (0..=FEW).filter_map(thrust).unzip())
+}
+
+/// Take-off by all propellers' thrust over speed.
+fn along(rig: &Rig, air: &Air, (speed, thrust): (Vec<f64>, Vec<f64>)) -> Option<TakeOff> {
+    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
+    let stall = speeds(a, air).stall_m_s?;
     let starts_at_rest = speed.first() == Some(&0.0);
     let reaches = speed.last().is_some_and(|&v| v >= SCREEN * stall);
     let thrust = Curve::new(speed, thrust).filter(|_| starts_at_rest && reaches)?;
     let (lift_off, screen) = (LIFT_OFF * stall, SCREEN * stall);
-    let (ground_roll_m, time_s) = roll(a, envelope.density_kg_m3, &thrust, lift_off)?;
-    let air = crate::air::Air::standard(envelope.altitude_m, envelope.isa_offset_k).ok()?;
-    let weight = weight_n(&Aircraft::Aeroplane(a.clone()));
-    let slope = |v: f64| Some((thrust.at(v) - drag_n(a, &air, v)?) / weight);
+    let (ground_roll_m, time_s) = roll(a, air.density_kg_m3, &thrust, lift_off)?;
+    let weight = a.mass_kg * G0_M_S2;
+    let slope = |v: f64| Some((thrust.at(v) - drag_n(a, air, v)?) / weight);
     let mean = 0.5 * (slope(lift_off)? + slope(screen)?);
     let gain = SCREEN_M + (screen * screen - lift_off * lift_off) / (2.0 * G0_M_S2);
     (mean > 0.0).then(|| TakeOff {

@@ -22,6 +22,8 @@ const FIRST: f64 = 0.7;
 const FIRST_CLIMBING_M_S: f64 = 1.0;
 /// Fastest speed considered, as a Mach number.
 const FASTEST_MACH: f64 = 0.7;
+/// How far either way of a near answer the next is sought, as a share of it.
+const NEAR: f64 = 0.06;
 /// Thrust that may be left over, as a share of it.
 const MET_SHARE: f64 = 1e-3;
 
@@ -39,6 +41,14 @@ pub(super) fn fastest(rig: &Rig, at: &Condition) -> Result<Full, State> {
         Err(State::OverLimitRpm) => held(rig, at),
         answer => answer,
     }
+}
+
+/// The same from the answer of a propeller a little different, where it leads there.
+pub(super) fn fastest_near(rig: &Rig, at: &Condition, near_m_s: Option<f64>) -> Result<Full, State> {
+    let exact = Chase::new(Solver { rig, rough: false }, at, true)?;
+    let rough = Chase::new(Solver { rig, rough: true }, at, true)?;
+    let found = near_m_s.and_then(|v| exact.met(&rough, (1.0 - NEAR) * v, (1.0 + NEAR) * v));
+    found.map_or_else(|| fastest(rig, at), Ok)
 }
 
 /// The fastest level flight within the engine's limit rpm, throttled back to it where full throttle would pass it.

@@ -37,6 +37,11 @@ impl Trail {
         Self { trusted: past.len() == MOST, past, ..Self::default() }
     }
 
+    /// The last answer alone: a guess for another propeller at the same speed.
+    pub(super) fn newest(&self) -> Self {
+        Self { past: self.past.first().copied().into_iter().collect(), ..Self::default() }
+    }
+
     /// The last answer.
     pub(super) fn last(&self) -> Option<&Met> {
         self.past.first().map(|(_, met)| met)

@@ -12,11 +12,13 @@ use crate::section::{check_polars, library};
 use carved::check_carved;
 use engine::{check_electric, check_piston};
 use logbook::check_logbook;
+use wishes::check_wishes;
 use wood::check_wood;
 
 mod carved;
 mod engine;
 mod logbook;
+mod wishes;
 mod wood;
 
 const MOST_STATIONS: usize = 200;
@@ -53,6 +55,20 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
     }
     if let Some(logbook) = &job.logbook {
         check_logbook(&mut found, logbook);
+    }
+    if let Some(wishes) = &job.wishes {
+        check_wishes(&mut found, wishes, &job.flight_points);
+    }
+    found.0
+}
+
+/// Every problem of the propeller alone.
+pub(super) fn propeller_problems(job: &Job) -> Vec<Problem> {
+    let mut found = Found::default();
+    check_propeller(&mut found, &job.propeller);
+    check_stations(&mut found, job);
+    if let Some(wood) = &job.wood {
+        check_wood(&mut found, wood, &job.propeller);
     }
     found.0
 }

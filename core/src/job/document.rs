@@ -9,6 +9,7 @@ mod engine;
 mod flight_point;
 mod logbook;
 mod propeller;
+mod wishes;
 mod wood;
 
 pub use aircraft::{Aeroplane, Aircraft, Drag, Multirotor};
@@ -19,6 +20,7 @@ pub use engine::{
 pub use flight_point::{FlightPoint, Setting};
 pub use logbook::{Factors, LogReading, Logbook, Widths};
 pub use propeller::{AngleReference, PitchControl, Propeller, Rotation, Station};
+pub use wishes::{Aim, Figure, Held, Limits, RpmLimit, Wishes};
 pub use wood::{Hub, OwnMaterial, Species, StressLimits, USUAL_SPECIES, Wood};
 
 use serde::{Deserialize, Serialize};
@@ -57,6 +59,9 @@ pub struct Job {
     /// What was read in ground runs and flights.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub logbook: Option<Logbook>,
+    /// What a search for the best blade is asked for.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub wishes: Option<Wishes>,
     /// How it is computed.
     #[serde(default)]
     pub method: Method,

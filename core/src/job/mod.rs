@@ -13,10 +13,11 @@ mod own;
 pub use check::section_name_known;
 pub use demo::{DEMOS, Demo};
 pub use document::{
-    Aeroplane, Aircraft, AltitudeLaw, AngleReference, Battery, BladeReading, Carved, CarvedBlade, Drag,
-    Electric, Engine, Factors, FlightPoint, HeldTo, HeldToKind, Hub, Interpolation, Job, LoadPoint,
-    LogReading, Logbook, Method, Multirotor, OwnMaterial, Piston, PitchControl, PowerPoint, Propeller,
-    Rotation, Section, Setting, Species, Station, StressLimits, USUAL_SPECIES, Widths, Wood,
+    Aeroplane, Aim, Aircraft, AltitudeLaw, AngleReference, Battery, BladeReading, Carved, CarvedBlade, Drag,
+    Electric, Engine, Factors, Figure, FlightPoint, Held, HeldTo, HeldToKind, Hub, Interpolation, Job,
+    Limits, LoadPoint, LogReading, Logbook, Method, Multirotor, OwnMaterial, Piston, PitchControl,
+    PowerPoint, Propeller, Rotation, RpmLimit, Section, Setting, Species, Station, StressLimits,
+    USUAL_SPECIES, Widths, Wishes, Wood,
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 
@@ -58,6 +59,12 @@ impl Job {
     #[must_use]
     pub fn check(&self) -> Vec<Problem> {
         check::problems(self)
+    }
+
+    /// Every value of the propeller alone that is not allowed.
+    #[must_use]
+    pub fn check_propeller(&self) -> Vec<Problem> {
+        check::propeller_problems(self)
     }
 }
 

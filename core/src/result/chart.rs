@@ -3,29 +3,12 @@
 use ndarray::Array2;
 use serde::{Serialize, Serializer};
 
-use super::Brief;
-
-/// A figure that an error of the blade changes.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
-#[serde(rename_all = "snake_case")]
-pub enum Figure {
-    /// True airspeed, m/s; of top speed.
-    AirspeedMS,
-    /// Propeller rpm.
-    Rpm,
-    /// Thrust of one propeller, N.
-    ThrustN,
-    /// Shaft power of one propeller, W.
-    PowerW,
-    /// `T V/P`.
-    Efficiency,
-    /// Rate of climb, m/s.
-    RateOfClimbMS,
-}
+use super::{Brief, Limit};
+use crate::job::Figure;
 
 impl Figure {
-    /// All of them.
-    pub const ALL: [Self; 6] =
+    /// Those that an error of the blade is judged by.
+    pub const JUDGED: [Self; 6] =
         [Self::AirspeedMS, Self::Rpm, Self::ThrustN, Self::PowerW, Self::Efficiency, Self::RateOfClimbMS];
 
     /// Its value at a flight point.
@@ -38,7 +21,16 @@ impl Figure {
             Self::PowerW => b.power_w,
             Self::Efficiency => b.efficiency,
             Self::RateOfClimbMS => b.rate_of_climb_m_s,
+            Self::EnduranceS => b.endurance_s,
+            Self::TakeOffM => b.take_off_m,
+            Self::TipMach => b.tip_mach,
         }
+    }
+
+    /// Whether less of it is better.
+    #[must_use]
+    pub fn less_is_better(self) -> bool {
+        matches!(self, Self::PowerW | Self::TakeOffM | Self::TipMach | Self::Rpm)
     }
 }
 
@@ -83,62 +75,6 @@ pub struct ErrorCosts {
     pub tolerance: Tolerance,
     /// Figures by flight point.
     pub costs: Vec<Cost>,
-}
-
-/// A limit of the finished propeller.
-#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
-#[serde(rename_all = "kebab-case")]
-pub enum Limit {
-    /// A flight point has no answer.
-    Answer,
-    /// Greatest propeller rpm.
-    RpmMost,
-    /// Least rpm standing at full throttle.
-    StandingRpmLeast,
-    /// Greatest helical Mach number of the tip.
-    TipMachMost,
-    /// Greatest diameter, by ground clearance.
-    DiameterMost,
-    /// Greatest width of the blank.
-    BlankWidthMost,
-    /// Greatest depth of the blank.
-    BlankDepthMost,
-}
-
-/// How far a limit is kept.
-#[derive(Clone, Debug, PartialEq, Serialize)]
-pub struct Margin {
-    /// The limit.
-    pub limit: Limit,
-    /// The flight point, where it is one of a flight point.
-    pub flight_point: Option<String>,
-    /// What is found, in the limit's own unit; `None` where there is no answer.
-    pub found: Option<f64>,
-    /// What is allowed.
-    pub allowed: f64,
-    /// Share of the limit left over; below zero it is broken.
-    pub share: f64,
-}
-
-impl Margin {
-    /// One plain sentence.
-    #[must_use]
-    pub fn sentence(&self) -> String {
-        let what = match self.limit {
-            Limit::Answer => "there is no answer",
-            Limit::RpmMost => "rpm is above its limit",
-            Limit::StandingRpmLeast => "the rpm standing at full throttle is below its limit",
-            Limit::TipMachMost => "the Mach number of the tip is above its limit",
-            Limit::DiameterMost => "the diameter is above what the ground leaves",
-            Limit::BlankWidthMost => "the blade is wider than the blank (m)",
-            Limit::BlankDepthMost => "the blade is deeper than the blank (m)",
-        };
-        let place = self.flight_point.as_ref().map_or_else(String::new, |p| format!("{p}: "));
-        match self.found {
-            Some(found) => format!("{place}{what}: {found:.4}, allowed {:.4}", self.allowed),
-            None => format!("{place}{what}"),
-        }
-    }
 }
 
 /// One propeller of the chart.

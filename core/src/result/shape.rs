@@ -31,6 +31,11 @@ pub struct Brief {
     pub tip_mach: Option<f64>,
     /// Shaft power over what full throttle gives at this rpm.
     pub power_share: Option<f64>,
+    /// How long fuel or battery last so, s.
+    pub endurance_s: Option<f64>,
+    /// Take-off distance to 15 m in this air, m; only where it was asked for.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub take_off_m: Option<f64>,
 }
 
 /// A flight point with the drawn and with the shaped blade.

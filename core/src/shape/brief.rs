@@ -1,30 +1,72 @@
 //! The figures of a flight point that decide between blades, without its stations.
 
-use crate::fit;
-use crate::job::FlightPoint;
+use crate::aircraft::propellers;
+use crate::fit::{self, Answer, Near};
+use crate::job::{Figure, FlightPoint, Setting};
 use crate::report;
 use crate::result::{Brief, Compared, Figures, Meeting, State};
 use crate::rig::{Rig, air_of};
+use crate::rotor::{Condition, Loads};
 
 /// The deciding figures of a flight point; where full throttle would pass the limit rpm, those held at it.
 #[must_use]
 pub fn brief(rig: &Rig, point: &FlightPoint) -> Brief {
-    let empty =
-        |state| told(point, state, (point.airspeed_m_s, None), &Figures::default(), &Meeting::default());
-    let Ok(air) = air_of(point) else { return empty(State::OutOfReach) };
+    let Ok(air) = air_of(point) else { return empty(point, State::OutOfReach) };
     match fit::condition(rig, point, air) {
-        Ok(at) => {
-            let figures = report::figures(&rig.rotor, &at, &rig.rotor.loads(&at));
-            let meeting = fit::meeting(rig, &at, &figures);
-            told(point, State::Ok, (Some(at.airspeed_m_s), Some(fit::rpm_of(&at))), &figures, &meeting)
-        }
+        Ok(at) => told_at(rig, point, &at, &rig.rotor.loads(&at)),
         Err(state) => fit::held(rig, point, air, state).map_or_else(
-            || empty(state),
+            || empty(point, state),
             |held| {
                 let here = (Some(held.airspeed_m_s), Some(held.rpm));
                 Brief { held_at_limit: true, ..told(point, state, here, &held.figures, &held.meeting) }
             },
         ),
+    }
+}
+
+/// A flight point as a search sees it: level flight is told even where the engine does not give it.
+pub(super) struct Look {
+    pub(super) brief: Brief,
+    /// What the engine has to spare in level flight: rpm as a share of its limit, power as a share of what is taken.
+    pub(super) spare: Option<(f64, f64)>,
+}
+
+pub(super) fn look(rig: &Rig, point: &FlightPoint, near: &mut Near) -> Look {
+    let level = point.setting == (Setting::Level {}) && rig.shaft.is_some();
+    let answer =
+        air_of(point).map_err(|_| State::OutOfReach).and_then(|air| fit::answer(rig, point, air, near));
+    match answer {
+        Err(state) => Look { brief: empty(point, state), spare: level.then_some((-1.0, -1.0)) },
+        Ok(Answer { condition, loads, held }) => {
+            let mut brief = told_at(rig, point, &condition, &loads);
+            let spare = level.then(|| fit::spare(rig, &condition, brief.power_w.unwrap_or(0.0)));
+            brief.held_at_limit = held;
+            brief.state = if held { State::OverLimitRpm } else { State::Ok };
+            Look { brief, spare: spare.flatten() }
+        }
+    }
+}
+
+fn empty(point: &FlightPoint, state: State) -> Brief {
+    told(point, state, (point.airspeed_m_s, None), &Figures::default(), &Meeting::default())
+}
+
+fn told_at(rig: &Rig, point: &FlightPoint, at: &Condition, loads: &Loads) -> Brief {
+    let figures = report::figures(&rig.rotor, at, loads);
+    let meeting = fit::meeting(rig, at, &figures);
+    let here = (Some(at.airspeed_m_s), Some(fit::rpm_of(at)));
+    let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
+    let lasts = |w: f64| rig.shaft.as_ref()?.endurance_s(fit::rpm_of(at), w, &at.air, engines);
+    let endurance_s = figures.power_w.filter(|w| *w > 0.0).and_then(lasts);
+    Brief { endurance_s, ..told(point, State::Ok, here, &figures, &meeting) }
+}
+
+/// One figure of a flight point; `None` where it has none.
+#[must_use]
+pub fn figure_at(rig: &Rig, point: &FlightPoint, figure: Figure) -> Option<f64> {
+    match figure {
+        Figure::TakeOffM => Some(fit::take_off_in(rig, &air_of(point).ok()?)?.distance_to_15_m),
+        figure => figure.of(&brief(rig, point)),
     }
 }
 
@@ -60,5 +102,7 @@ fn told(
         rate_of_climb_m_s: m.rate_of_climb_m_s,
         tip_mach: f.tip_mach,
         power_share: m.power_share,
+        endurance_s: None,
+        take_off_m: None,
     }
 }

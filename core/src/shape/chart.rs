@@ -2,9 +2,12 @@
 
 use ndarray::Array2;
 
-use super::limits::{Limits, margins, standing};
+use super::ShapeError;
+use super::brief::look;
+use super::limits::{margins, standing};
 use super::variant::{accepted, with_angles_of};
-use super::{ShapeError, brief};
+use crate::fit::Near;
+use crate::job::Limits;
 use crate::result::{ChartCell, PitchDiameter};
 use crate::rig::Rig;
 
@@ -39,21 +42,22 @@ pub fn pitch_diameter(
             return Err(ShapeError::Figure { name, found: steps as f64, allowed: "1 to 200" });
         }
     }
-    let standing = standing(rig).filter(|_| limits.standing_rpm_least.is_some());
-    let cell = |(p, d): (usize, usize)| {
+    let standing = standing(rig, limits);
+    let (mut near, mut near_standing) = (Near::default(), Near::default());
+    let mut cell = |(p, d): (usize, usize)| {
         let rig = sized(rig, pitches_m[p], diameters_m[d], by).ok()?;
-        let figures = brief(&rig, at);
-        let standing = standing.as_ref().map(|point| brief(&rig, point));
-        let all = margins(&rig, limits, std::slice::from_ref(&figures), standing.as_ref());
+        let looked = look(&rig, at, &mut near);
+        let standing = standing.as_ref().map(|point| look(&rig, point, &mut near_standing).brief);
+        let all = margins(&rig, limits, std::slice::from_ref(&looked), standing.as_ref());
         let broken = all.iter().filter(|m| m.share < 0.0).map(|m| m.limit).collect();
-        Some(ChartCell { figures, standing_rpm: standing.and_then(|b| b.rpm), broken })
+        Some(ChartCell { figures: looked.brief, standing_rpm: standing.and_then(|b| b.rpm), broken })
     };
     Ok(PitchDiameter {
         flight_point: at.name.clone(),
         pitches_m: pitches_m.to_vec(),
         diameters_m: diameters_m.to_vec(),
         drawn_m: (rig.rotor.blade.pitch_075_m(0.0), rig.job.propeller.diameter_m),
-        cells: Array2::from_shape_fn((pitches_m.len(), diameters_m.len()), cell),
+        cells: Array2::from_shape_fn((pitches_m.len(), diameters_m.len()), &mut cell),
     })
 }
 

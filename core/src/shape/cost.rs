@@ -103,7 +103,7 @@ fn empty(point: &FlightPoint, drawn: &Brief) -> Vec<Cost> {
         band_worst: 0.0,
         band_independent: 0.0,
     };
-    Figure::ALL.into_iter().filter(may).filter_map(known).map(cost).collect()
+    Figure::JUDGED.into_iter().filter(may).filter_map(known).map(cost).collect()
 }
 
 /// Half the width of a difference in degrees or mm.

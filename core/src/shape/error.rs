@@ -13,6 +13,26 @@ pub enum ShapeError {
     /// There is no such flight point.
     #[error("flight point {0}: the job has no such point")]
     NoPoint(usize),
+    /// There is no flight point of this name.
+    #[error("flight point \"{0}\": the job has no such point")]
+    NoPointNamed(String),
+    /// A figure that a flight point does not have.
+    #[error("{name}: {why}")]
+    Aim {
+        /// The flight point.
+        name: String,
+        /// Why.
+        why: &'static str,
+    },
+    /// Nothing is free.
+    #[error("diameter, pitch, twist and chord are all held: there is nothing to search")]
+    AllHeld,
+    /// No blade within the spans of the search keeps all limits.
+    #[error("no blade within limits was found. The nearest one fails at this: {nearest}")]
+    NoneWithinLimits {
+        /// The limit most in the way, and by how much.
+        nearest: String,
+    },
     /// No flight point has a weight.
     #[error("weights: no flight point counts; at least one needs a weight above 0, and none below 0")]
     NoWeight,

@@ -1,68 +1,33 @@
-//! Limits of the finished propeller, and how far each is kept.
+//! How far the limits of the finished propeller are kept.
 
-use crate::job::{FlightPoint, Setting};
+use super::brief::Look;
+use crate::job::{FlightPoint, Limits, Setting};
 use crate::result::{Brief, Limit, Margin};
 use crate::rig::Rig;
 
-/// Limits; `None` is no limit.
-#[derive(Clone, Copy, Debug, Default, PartialEq)]
-pub struct Limits {
-    /// Greatest propeller rpm at any flight point looked at.
-    pub rpm_most: Option<f64>,
-    /// Least propeller rpm standing at full throttle.
-    pub standing_rpm_least: Option<f64>,
-    /// Greatest helical Mach number of the tip at any flight point looked at.
-    pub tip_mach_most: Option<f64>,
-    /// Greatest diameter, m: twice the height of the shaft less the clearance.
-    pub diameter_most_m: Option<f64>,
-    /// Greatest width of the blade in the plane of rotation, m.
-    pub blank_width_most_m: Option<f64>,
-    /// Greatest depth of the blade along the axis, m.
-    pub blank_depth_most_m: Option<f64>,
-}
-
 /// The flight point of the standing limit: the air of the first flight point, at rest, full throttle.
-pub(super) fn standing(rig: &Rig) -> Option<FlightPoint> {
+pub(super) fn standing(rig: &Rig, limits: &Limits) -> Option<FlightPoint> {
+    limits.standing_rpm_least?;
     let first = rig.job.flight_points.first()?.clone();
     let name = "Standing, full throttle".into();
     Some(FlightPoint { name, airspeed_m_s: Some(0.0), setting: Setting::FullThrottle {}, ..first })
 }
 
-/// Margins of a propeller with its figures at the flight points looked at; `standing` where that limit is set.
+/// Margins of a propeller with its figures at the flight points looked at; `standing` where that limit is set. How many there
+/// are depends on the job and its limits alone.
 pub(super) fn margins(
     rig: &Rig,
     limits: &Limits,
-    looked_at: &[Brief],
+    looked_at: &[Look],
     standing: Option<&Brief>,
 ) -> Vec<Margin> {
-    let mut all = Vec::new();
-    for b in looked_at {
-        let place = Some(b.name.clone());
-        let answer = if b.rpm.is_some() { 1.0 } else { -1.0 };
-        all.push(Margin {
-            limit: Limit::Answer,
-            flight_point: place.clone(),
-            found: None,
-            allowed: 0.0,
-            share: answer,
-        });
-        all.extend(limits.rpm_most.map(|most| at_most(Limit::RpmMost, place.clone(), b.rpm, most)));
-        all.extend(limits.tip_mach_most.map(|most| at_most(Limit::TipMachMost, place, b.tip_mach, most)));
-    }
+    let mut all: Vec<Margin> = looked_at.iter().flat_map(|look| at_point(limits, look)).collect();
     if let (Some(least), Some(b)) = (limits.standing_rpm_least, standing) {
-        let share = b.rpm.map_or(-1.0, |rpm| rpm / least - 1.0);
-        let flight_point = Some(b.name.clone());
-        all.push(Margin {
-            limit: Limit::StandingRpmLeast,
-            flight_point,
-            found: b.rpm,
-            allowed: least,
-            share,
-        });
+        all.push(at_least(Limit::StandingRpmLeast, b, least));
     }
     let (width_m, depth_m) = blank_m(rig);
     let blade = [
-        (Limit::DiameterMost, rig.job.propeller.diameter_m, limits.diameter_most_m),
+        (Limit::DiameterMost, rig.job.propeller.diameter_m, limits.greatest_diameter_m()),
         (Limit::BlankWidthMost, width_m, limits.blank_width_most_m),
         (Limit::BlankDepthMost, depth_m, limits.blank_depth_most_m),
     ];
@@ -72,9 +37,44 @@ pub(super) fn margins(
     all
 }
 
-fn at_most(limit: Limit, flight_point: Option<String>, found: Option<f64>, allowed: f64) -> Margin {
-    let share = found.map_or(-1.0, |f| 1.0 - f / allowed);
-    Margin { limit, flight_point, found, allowed, share }
+/// Limits that a flight point has by itself.
+fn at_point(limits: &Limits, look: &Look) -> Vec<Margin> {
+    let b = &look.brief;
+    let place = || Some(b.name.clone());
+    let mut all = Vec::new();
+    let share = if b.rpm.is_some() { 1.0 } else { -1.0 };
+    all.push(Margin { limit: Limit::Answer, flight_point: place(), found: None, allowed: None, share });
+    if let Some((rpm_share, power_share)) = look.spare {
+        let allowed = |found: Option<f64>, by: f64| found.map(|f| f * by);
+        let engine = [
+            (Limit::EngineRpm, b.rpm, allowed(b.rpm, 1.0 / (1.0 - rpm_share)), rpm_share),
+            (Limit::EnginePower, b.power_w, allowed(b.power_w, 1.0 + power_share), power_share),
+        ];
+        all.extend(engine.map(|(limit, found, allowed, share)| Margin {
+            limit,
+            flight_point: place(),
+            found,
+            allowed,
+            share,
+        }));
+    }
+    all.extend(limits.rpm_most.map(|most| at_most(Limit::RpmMost, place(), b.rpm, most)));
+    for own in limits.rpm.iter().filter(|own| own.flight_point == b.name) {
+        all.extend(own.most.map(|most| at_most(Limit::RpmMost, place(), b.rpm, most)));
+        all.extend(own.least.map(|least| at_least(Limit::RpmLeast, b, least)));
+    }
+    all.extend(limits.tip_mach_most.map(|most| at_most(Limit::TipMachMost, place(), b.tip_mach, most)));
+    all
+}
+
+fn at_most(limit: Limit, flight_point: Option<String>, found: Option<f64>, most: f64) -> Margin {
+    let share = found.map_or(-1.0, |f| 1.0 - f / most);
+    Margin { limit, flight_point, found, allowed: Some(most), share }
+}
+
+fn at_least(limit: Limit, b: &Brief, least: f64) -> Margin {
+    let share = b.rpm.map_or(-1.0, |rpm| rpm / least - 1.0);
+    Margin { limit, flight_point: Some(b.name.clone()), found: b.rpm, allowed: Some(least), share }
 }
 
 /// Width and depth of the box round every station: chord line and thickness laid across one another, on the safe side.

@@ -11,15 +11,16 @@ mod cost;
 mod error;
 mod least_loss;
 mod limits;
+mod search;
 mod twist;
 mod variant;
 
-pub use brief::{brief, briefs};
+pub use brief::{brief, briefs, figure_at};
 pub use chart::{MOST_CHART_STEPS, PitchBy, pitch_diameter, sized};
 pub use cost::error_costs;
 pub use error::ShapeError;
 pub use least_loss::{Lift, LossTask, least_loss};
-pub use limits::Limits;
+pub use search::{FREE, Listener, Progress, Wish, search, usual_aims};
 pub use twist::twist;
 
 use crate::job::Job;

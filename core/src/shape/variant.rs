@@ -35,7 +35,7 @@ pub(super) fn rounded(value: f64, parts: f64) -> f64 {
 /// The job with a propeller, refused where its check does.
 pub(super) fn accepted(rig: &Rig, propeller: Propeller) -> Result<Rig, ShapeError> {
     let new = rig.with_propeller(propeller)?;
-    match new.job.check() {
+    match new.job.check_propeller() {
         problems if problems.is_empty() => Ok(new),
         problems => Err(ShapeError::Refused(problems)),
     }

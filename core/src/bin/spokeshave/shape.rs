@@ -1,8 +1,11 @@
 //! `spokeshave shape`: a better blade for the job, as a variant beside the drawn one.
 
+mod chart;
 mod error;
 mod least_loss;
+mod search;
 mod twist;
+mod wishes;
 
 use clap::Subcommand;
 use serde::Serialize;
@@ -28,6 +31,10 @@ enum How {
     Twist(twist::Args),
     /// Chord and angle of least induced loss at one flight point
     LeastLoss(least_loss::Args),
+    /// Diameter, pitch, twist and chord for the best over several flight points, within limits
+    Search(search::Args),
+    /// Any figure over pitch and diameter, with the limits that are broken
+    Chart(chart::Args),
     /// What an error of angle, chord or thickness costs, station by station
     Error(error::Args),
 }
@@ -48,6 +55,8 @@ pub(crate) fn run(args: &Args) -> Outcome {
     match &args.how {
         How::Twist(how) => twist::run(&rig, how),
         How::LeastLoss(how) => least_loss::run(&rig, how),
+        How::Search(how) => search::run(&rig, how),
+        How::Chart(how) => chart::run(&rig, how),
         How::Error(how) => error::run(&rig, how),
     }
 }

@@ -53,9 +53,9 @@ fn text(e: &ErrorCosts) -> String {
 
 fn row(c: &Cost) -> Vec<String> {
     let digits = match c.figure {
-        Figure::Efficiency => 5,
+        Figure::Efficiency | Figure::TipMach => 5,
         Figure::AirspeedMS | Figure::RateOfClimbMS => 3,
-        Figure::Rpm | Figure::ThrustN | Figure::PowerW => 2,
+        Figure::Rpm | Figure::ThrustN | Figure::PowerW | Figure::EnduranceS | Figure::TakeOffM => 2,
     };
     let mut row = vec![c.flight_point.clone(), word(&c.figure), figure(Some(c.drawn), digits)];
     row.extend(c.per_degree.iter().map(|s| signed(*s, digits)));
