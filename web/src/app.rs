@@ -4,7 +4,7 @@ use std::cell::RefCell;
 use std::rc::Rc;
 
 use gloo_events::EventListener;
-use spokeshave::drawn::DrawnStation;
+use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::Along;
 use spokeshave::job::Job;
 use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
@@ -66,6 +66,39 @@ pub struct Now {
     pub lift_to_drag: Rc<Vec<[f64; 2]>>,
     /// Whether this browser keeps the job.
     pub kept: bool,
+    /// The blade compared, at the same flight point.
+    pub beside: Option<Rc<Compared>>,
+}
+
+/// A blade beside the drawn one, worked out.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Compared {
+    /// What it is.
+    pub name: String,
+    /// The job with it, made ready.
+    pub rig: RigRef,
+    /// Its stations as drawn.
+    pub drawn: Rc<Vec<DrawnStation>>,
+    /// The flight point selected.
+    pub point: Option<PointResult>,
+}
+
+/// Works out the blade compared at a flight point; none where the job does not allow it.
+#[hook]
+fn use_beside(state: &State) -> Option<Rc<Compared>> {
+    let compared = state.variants.compared().cloned();
+    let rig = use_memo((Same(state.job().clone()), compared.clone()), |(job, variant)| {
+        let rig = Rig::new(&variant.as_ref()?.of(&job.0)).ok();
+        rig.map(|rig| RigRef(Rc::new(rig)))
+    });
+    let point = state.point;
+    let beside = use_memo(((*rig).clone(), compared, point), |(rig, variant, point)| {
+        let rig = rig.clone()?;
+        let drawn = Rc::new(stations(&rig.0.rotor.blade, rig.0.job.propeller.angle_reference));
+        let (name, result) = (variant.as_ref()?.name.clone(), rig.0.point(*point));
+        Some(Rc::new(Compared { name, drawn, point: result, rig }))
+    });
+    (*beside).clone()
 }
 
 /// A rig compared by identity.
@@ -116,8 +149,10 @@ impl Later {
 #[hook]
 fn use_now(results: &Rc<RefCell<Results>>, state: &State) -> Rc<Now> {
     let results = results.clone();
+    let beside = use_beside(state);
     let kept = use_memo(Same(state.job().clone()), |job| keep::before_work(&job.0.to_json()));
-    use_memo((Same(state.job().clone()), state.point, state.station), move |(job, point, station)| {
+    let key = (Same(state.job().clone()), state.point, state.station, beside);
+    use_memo(key, move |(job, point, station, beside)| {
         let mut results = results.borrow_mut();
         let results = results.of(&job.0);
         let section = results.section(*point, *station);
@@ -128,6 +163,7 @@ fn use_now(results: &Rc<RefCell<Results>>, state: &State) -> Rc<Now> {
             point: results.point(*point),
             lift_to_drag: Rc::new(section.iter().map(|s| [s.alpha_deg, s.lift_to_drag]).collect()),
             kept: *kept,
+            beside: beside.clone(),
         }
     })
 }

@@ -1,10 +1,10 @@
 //! The page's side: giving an order to a worker and hearing of it.
 
+use serde::Serialize;
+use serde::de::DeserializeOwned;
 use wasm_bindgen::closure::Closure;
 use wasm_bindgen::prelude::wasm_bindgen;
 use web_sys::Worker;
-
-use super::order::{Order, Report};
 
 #[wasm_bindgen]
 extern "C" {
@@ -14,9 +14,9 @@ extern "C" {
 
 /// What comes back from a worker.
 #[derive(Clone, Debug, PartialEq)]
-pub enum Heard {
+pub enum Heard<R> {
     /// A report.
-    Report(Report),
+    Report(R),
     /// The worker met a fault of its own and stopped.
     Fault(String),
 }
@@ -28,8 +28,12 @@ pub struct Hand {
 }
 
 impl Hand {
-    /// Gives an order; none where the browser refuses a worker.
-    pub fn give(order: &Order, mut heard: impl FnMut(Heard) + 'static) -> Option<Self> {
+    /// Gives an order to one of the worker's functions; none where the browser refuses a worker.
+    pub fn give<R: DeserializeOwned>(
+        task: &str,
+        order: &impl Serialize,
+        mut heard: impl FnMut(Heard<R>) + 'static,
+    ) -> Option<Self> {
         let hear = Closure::<dyn FnMut(String, String)>::new(move |kind: String, text: String| {
             heard(match serde_json::from_str(&text) {
                 Ok(report) if kind == "report" => Heard::Report(report),
@@ -37,7 +41,7 @@ impl Hand {
             });
         });
         let text = serde_json::to_string(order).ok()?;
-        let worker = background("make_polars", &text, &hear)?;
+        let worker = background(task, &text, &hear)?;
         Some(Self { worker, _hear: hear })
     }
 }

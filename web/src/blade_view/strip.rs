@@ -1,5 +1,6 @@
 //! The blade lying down, for narrow screens: hub left, signed figures under it.
 
+use super::Ghost;
 use super::planform::{AHEAD, Planform};
 use super::stations::{StationOption, list, on_keys, read_out, spoken};
 use crate::chart::axis::px;
@@ -35,6 +36,9 @@ pub struct BladeStripProps {
     pub selected: usize,
     /// Told when a station is chosen.
     pub on_select: Callback<usize>,
+    /// Another variant's outline and departure.
+    #[prop_or_default]
+    pub ghost: Option<Ghost>,
 }
 
 /// The lying blade, as wide as its place.
@@ -89,9 +93,16 @@ fn blade(lie: &Lie, props: &BladeStripProps) -> Html {
             <path class="hub" d={hub(lie, shape)} />
             { for bands }
             <path class="outline" d={shape.outline(|r, o| lie.place(r, o))} />
+            { ghost(lie, props) }
             <line class="centre-line" x1="0" x2={px(lie.width)} y1={px(lie.axis_y)} y2={px(lie.axis_y)} />
         </g>
     }
+}
+
+/// The outline of the blade compared.
+fn ghost(lie: &Lie, props: &BladeStripProps) -> Option<Html> {
+    let shape = props.ghost.as_ref()?.shape.as_ref()?;
+    Some(html! { <path class="ghost" d={shape.outline(|r, o| lie.place(r, o))} /> })
 }
 
 fn hub(lie: &Lie, shape: &Planform) -> String {

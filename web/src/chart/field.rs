@@ -1,19 +1,17 @@
-//! One figure of the map as a grid for contours: gaps filled, padded by a cell all round.
+//! One figure as a grid for contours: gaps filled, padded by a cell all round.
 //!
-//! Contours of a grid close half a cell outside its outermost points, and the radii of the map stand half a cell
-//! inside its frame. The padding goes on as the last two points do, so that lines run straight to the frame,
+//! Contours of a grid close half a cell outside its outermost points, and points may stand half a cell inside their frame. The padding goes on as the last two points do, so that lines run straight to the frame,
 //! which cuts off where they close.
 
-use super::frame::Frame;
+use super::path::Path;
 use contour::ContourBuilder;
 use ndarray::Array2;
-use spokeshave::rotor::{DepartureMap, MapCell};
 
 /// A ring of a contour, pixels.
-pub(super) type Ring = Vec<[f64; 2]>;
+pub type Ring = Vec<[f64; 2]>;
 
 /// A padded grid without gaps.
-pub(super) struct Field {
+pub struct Field {
     columns: usize,
     rows: usize,
     values: Vec<f64>,
@@ -23,30 +21,21 @@ pub(super) struct Field {
 }
 
 impl Field {
-    /// `None` where the map has fewer than two rows or columns, or the figure nowhere.
-    pub(super) fn new(
-        map: &DepartureMap,
-        frame: &Frame,
-        of: impl Fn(&MapCell) -> Option<f64>,
-    ) -> Option<Self> {
-        let (rows, columns) = map.cells.dim();
-        let known = map.cells.map(|cell| of(cell).filter(|v| v.is_finite()));
+    /// A figure by row and column, its columns and rows at these pixels. `None` with fewer than two rows or columns, and where the figure is
+    /// nowhere.
+    #[must_use]
+    pub fn new(known: &Array2<Option<f64>>, xs: Vec<f64>, ys: Vec<f64>) -> Option<Self> {
+        let (rows, columns) = known.dim();
         if rows < 2 || columns < 2 {
             return None;
         }
-        let full = filled(&known)?;
-        let speed = frame.speed();
-        Some(Self {
-            columns: columns + 2,
-            rows: rows + 2,
-            values: padded(&full),
-            xs: map.airspeeds_m_s.iter().map(|v| speed.px(*v)).collect(),
-            ys: map.radii_m.iter().map(|r| frame.axis.y(*r)).collect(),
-        })
+        let full = filled(&known.map(|v| v.filter(|v| v.is_finite())))?;
+        Some(Self { columns: columns + 2, rows: rows + 2, values: padded(&full), xs, ys })
     }
 
     /// Rings about all that is at or above a level.
-    pub(super) fn rings(&self, level: f64) -> Vec<Ring> {
+    #[must_use]
+    pub fn rings(&self, level: f64) -> Vec<Ring> {
         let builder = ContourBuilder::new(self.columns, self.rows, true);
         let Ok(lines) = builder.lines(&self.values, &[level]) else { return Vec::new() };
         let rings = lines.iter().flat_map(|line| &line.geometry().0);
@@ -57,6 +46,17 @@ impl Field {
     fn pixel(&self, x: f64, y: f64) -> [f64; 2] {
         [between(&self.xs, x - 1.5), between(&self.ys, y - 1.5)]
     }
+}
+
+/// Rings as path data.
+#[must_use]
+pub fn data(rings: &[Ring]) -> String {
+    let mut path = Path::default();
+    for ring in rings {
+        path.run(ring.iter().take(ring.len().saturating_sub(1)).copied());
+        path.close();
+    }
+    path.into_string()
 }
 
 /// The value at a fractional index, continued beyond the ends.
@@ -107,40 +107,7 @@ fn nearest<T: Clone>(items: &[Option<T>]) -> Option<Vec<T>> {
 
 #[cfg(test)]
 mod tests {
-    use super::super::frame::tests::{frame, sample};
     use super::*;
-
-    #[test]
-    fn a_contour_lies_where_the_figure_has_its_level() {
-        let (map, frame) = (sample(), frame());
-        let field = Field::new(&map, &frame, |c| c.departure_deg).unwrap();
-        let mut seen = 0;
-        for [x, y] in field.rings(2.0).concat() {
-            let inside = (15.0..405.0).contains(&x) && frame.axis.y(0.66) < y && y < frame.axis.y(0.14);
-            // Row 3 has a gap, filled from beside.
-            if inside && (y - frame.axis.y(map.radii_m[3])).abs() > 34.0 {
-                let departure = 14.0 - 2.4 * frame.speed().value(x) / 5.0
-                    + 0.3 * ((frame.axis.scale().value(y) - 0.1) / 0.05 - 0.5);
-                assert!((departure - 2.0).abs() < 0.02, "{x} {y}: {departure}");
-                seen += 1;
-            }
-        }
-        assert!(seen >= 6, "{seen}");
-    }
-
-    #[test]
-    fn contours_end_outside_the_frame() {
-        let field = Field::new(&sample(), &frame(), |c| c.departure_deg).unwrap();
-        let all = field.rings(2.0).concat();
-        let least = |i: usize| all.iter().map(|at| at[i]).fold(f64::MAX, f64::min);
-        let most = |i: usize| all.iter().map(|at| at[i]).fold(f64::MIN, f64::max);
-        let axis = frame().axis;
-        assert!(
-            least(0) < 10.0 && least(1) < axis.top_px && most(1) > axis.hub_px,
-            "all but the fast side is hard"
-        );
-        assert!(most(0) < 410.0);
-    }
 
     #[test]
     fn padding_goes_on_straight() {

@@ -3,6 +3,7 @@
 pub mod axis;
 pub mod clear;
 pub mod departure;
+pub mod field;
 pub mod figure;
 pub mod hatch;
 pub mod line;

@@ -26,6 +26,9 @@ pub struct DragCurveProps {
     /// The best angles.
     #[prop_or_default]
     pub best: Best,
+    /// The same curves of the blade compared.
+    #[prop_or_default]
+    pub ghosts: Vec<Line>,
     /// Radius (m) and figure (SI, or degrees) of each station, for each measure.
     pub rings: Vec<Vec<[f64; 2]>>,
     /// What the axes are made for.
@@ -56,6 +59,7 @@ pub fn DragCurve(props: &DragCurveProps) -> Html {
                     role="group" aria-label={format!("{} over radius; each ring can be moved", props.title)}>
                     { axes(&frame, unit, props.length) }
                     { best(&frame, &props.best) }
+                    { for props.ghosts.iter().map(|line| html! { <path class="ghost" d={path(&frame, line)} /> }) }
                     { for props.lines.iter().enumerate().map(|(i, line)| curve(&frame, line, i, selected_m)) }
                     { for rings }
                 </svg>
@@ -97,11 +101,13 @@ fn best(frame: &Frame, best: &Best) -> Html {
     }
 }
 
-fn curve(frame: &Frame, line: &Line, i: usize, selected_m: f64) -> Html {
+fn path(frame: &Frame, line: &Line) -> String {
     let inside = |p: &&[f64; 2]| frame.x.holds(p[0]);
-    let path = polyline(
-        line.points.iter().filter(inside).map(|p| [frame.x.px(p[0]), frame.y.px(frame.y.held(p[1]))]),
-    );
+    polyline(line.points.iter().filter(inside).map(|p| [frame.x.px(p[0]), frame.y.px(frame.y.held(p[1]))]))
+}
+
+fn curve(frame: &Frame, line: &Line, i: usize, selected_m: f64) -> Html {
+    let path = path(frame, line);
     // The first curve has its name below it, the second above.
     // It keeps away from the figure of the ring selected.
     let places = [2, 5].map(|ninths| line.points[line.points.len() * ninths / 9]);

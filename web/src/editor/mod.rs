@@ -8,11 +8,12 @@ pub mod ring;
 
 use std::rc::Rc;
 
+use spokeshave::blade::Blade;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::result::PointResult;
 use yew::prelude::*;
 
-use crate::app::RigRef;
+use crate::app::{Compared, RigRef};
 use crate::number::fixed;
 use crate::state::{Action, Measure};
 use crate::units::{Quantity, Units};
@@ -20,7 +21,7 @@ use crate::view::form::Pick;
 use crate::view::{Seen, use_act};
 use curve::DragCurve;
 use frame::Spans;
-use lines::{Best, best_angles, chord, thickness, twist};
+use lines::{Best, Line, best_angles, chord, thickness, twist};
 
 /// Properties of [`Curves`].
 #[derive(Properties, PartialEq)]
@@ -33,6 +34,9 @@ pub struct CurvesProps {
     pub point: Rc<Option<PointResult>>,
     /// The job made ready.
     pub rig: Option<RigRef>,
+    /// The blade compared.
+    #[prop_or_default]
+    pub beside: Option<Rc<Compared>>,
 }
 
 const ANGLE: &[Measure] = &[Measure::Angle];
@@ -52,11 +56,15 @@ pub fn Curves(props: &CurvesProps) -> Html {
     });
     *spans.borrow_mut() = Some(now);
     let length = state.units.unit(Quantity::Length);
+    let other = props.beside.as_ref().map(|b| &b.rig.0.rotor.blade);
+    let ghosts = |of: &[fn(&Blade) -> Line]| -> Vec<Line> {
+        other.into_iter().flat_map(|blade| of.iter().map(move |line| line(blade))).collect()
+    };
     html! {
         <div class="curves">
-            <DragCurve title="Blade angle" what="degrees to the chord line" measures={ANGLE} lines={vec![twist(blade)]} {best}
+            <DragCurve title="Blade angle" what="degrees to the chord line" measures={ANGLE} lines={vec![twist(blade)]} {best} ghosts={ghosts(&[twist])}
                 rings={rings(&props.drawn, ANGLE)} spans={now[0]} {length} selected={state.station} height={196.0} />
-            <DragCurve title="Chord and thickness" what={length.name} measures={WOOD} lines={vec![chord(blade), thickness(blade)]}
+            <DragCurve title="Chord and thickness" what={length.name} measures={WOOD} lines={vec![chord(blade), thickness(blade)]} ghosts={ghosts(&[chord, thickness])}
                 rings={rings(&props.drawn, WOOD)} spans={now[1]} {length} selected={state.station} height={176.0} />
             <Follow span={state.follow} units={state.units} />
         </div>

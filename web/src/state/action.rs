@@ -2,7 +2,7 @@
 
 use spokeshave::fit::Along;
 
-use super::{Choice, Field, Held, Notice, Part, Running, Theme};
+use super::{Beside, Choice, Field, Held, Notice, Part, Running, Theme};
 use crate::units::Units;
 
 /// What can happen.
@@ -58,6 +58,8 @@ pub enum Action {
     Say(Notice),
     /// A panel was opened or closed.
     Unfold(Part, bool),
+    /// Something is done with the blades beside the drawn one.
+    Beside(Beside),
     /// The job was saved as a file.
     Saved,
     /// What was said has been read.

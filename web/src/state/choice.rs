@@ -1,9 +1,12 @@
 //! What is picked rather than typed, and what is added to or taken out of a job.
 
 use spokeshave::drawn::{measured_by, with_station};
-use spokeshave::job::{AngleReference, FlightPoint, Job, PitchControl, Rotation, Section, Setting};
+use spokeshave::job::{
+    Aim, AngleReference, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting,
+};
 
 use super::notice::in_words;
+use super::wishes::some;
 
 /// A blade needs an inner and an outer station.
 pub const FEWEST_STATIONS: usize = 2;
@@ -49,6 +52,10 @@ pub enum Choice {
     Aircraft(AircraftChoice),
     /// Something of the engine.
     Engine(EngineChoice),
+    /// What counts in a search.
+    Aims(Vec<Aim>),
+    /// Whether a search leaves something as drawn.
+    Hold(Held, bool),
 }
 
 /// Ways the blades turn in the hub.
@@ -191,6 +198,8 @@ impl Choice {
             Self::RemovePoint(i) => format!("remove {}", point(i)),
             Self::Aircraft(choice) => choice.name(),
             Self::Engine(choice) => choice.name(),
+            Self::Aims(_) => "what counts in a search".into(),
+            Self::Hold(..) => "what a search leaves as drawn".into(),
         }
     }
 
@@ -234,10 +243,21 @@ impl Choice {
                 remove(&mut next.propeller.stations, *i, FEWEST_STATIONS, "A blade needs two stations.")?;
             }
             Self::AddPoint(like) => add_point(&mut next, *like),
-            Self::RemovePoint(i) => remove(&mut next.flight_points, *i, 1, "A job needs one flight point.")?,
+            Self::RemovePoint(i) => {
+                let name = next.flight_points.get(*i).map_or_else(String::new, |p| p.name.clone());
+                remove(&mut next.flight_points, *i, 1, "A job needs one flight point.")?;
+                next.wishes.iter_mut().for_each(|wishes| wishes.forget_point(&name));
+            }
             Self::Aircraft(choice) => choice.apply(&mut next),
             Self::Engine(choice) => choice.apply(&mut next)?,
+            Self::Aims(aims) => next.wishes.get_or_insert_default().aims.clone_from(aims),
+            Self::Hold(what, on) => {
+                let held = &mut next.wishes.get_or_insert_default().held;
+                held.retain(|h| h != what);
+                held.extend(on.then_some(*what));
+            }
         }
+        next.wishes = next.wishes.and_then(some);
         Ok(next)
     }
 }

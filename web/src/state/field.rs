@@ -6,6 +6,7 @@ use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
 use super::machine::{AircraftFigure, EngineFigure};
 use super::measure::{Measure, write_station};
 use super::point_figure::PointFigure;
+use super::wishes::LimitFigure;
 use crate::units::Quantity;
 
 /// One figure of a job.
@@ -39,6 +40,8 @@ pub enum Field {
     Aircraft(AircraftFigure),
     /// A figure of the engine.
     Engine(EngineFigure),
+    /// A limit of the finished propeller.
+    Limit(LimitFigure),
 }
 
 impl Field {
@@ -65,6 +68,7 @@ impl Field {
             },
             Self::Aircraft(figure) => figure.quantity(),
             Self::Engine(figure) => figure.quantity(),
+            Self::Limit(figure) => figure.quantity(),
         }
     }
 
@@ -89,6 +93,7 @@ impl Field {
             Self::Elements => "number of elements".into(),
             Self::Aircraft(figure) => figure.name().into(),
             Self::Engine(figure) => figure.name(),
+            Self::Limit(figure) => figure.name().into(),
         }
     }
 
@@ -110,6 +115,7 @@ impl Field {
             Self::Elements => "method.elements".into(),
             Self::Aircraft(figure) => figure.path(),
             Self::Engine(figure) => figure.path(),
+            Self::Limit(figure) => figure.path(),
         }
     }
 
@@ -131,6 +137,7 @@ impl Field {
             (Self::Elements, _) => Some(f64::from(job.method.elements)),
             (Self::Aircraft(figure), _) => figure.value(job),
             (Self::Engine(figure), _) => figure.value(job),
+            (Self::Limit(figure), _) => figure.value(job),
             _ => None,
         }
     }
@@ -160,6 +167,9 @@ impl Field {
 
     /// Writes a text into a job; whether the field is one.
     pub fn write_text(self, job: &mut Job, text: &str) -> bool {
+        if let (Self::Point(..), Some(old)) = (self, self.text(job).map(String::from)) {
+            job.wishes.iter_mut().for_each(|wishes| wishes.rename_point(&old, text));
+        }
         let place = match self {
             Self::Title => Some(&mut job.title),
             Self::Point(i, PointFigure::Name) => job.flight_points.get_mut(i).map(|p| &mut p.name),
@@ -185,6 +195,7 @@ impl Field {
             (Self::Elements, _) => job.method.elements = whole(value),
             (Self::Aircraft(figure), _) => return figure.write(job, value),
             (Self::Engine(figure), _) => return figure.write(job, value),
+            (Self::Limit(figure), _) => figure.write(job, value),
             _ => return false,
         }
         true
@@ -202,6 +213,10 @@ impl Field {
             }
             Self::Aircraft(figure) => figure.clear(job),
             Self::Engine(figure) => figure.clear(job),
+            Self::Limit(figure) => {
+                figure.clear(job);
+                true
+            }
             _ => false,
         }
     }

@@ -16,6 +16,8 @@ pub mod point_figure;
 mod tests;
 #[cfg(test)]
 mod tests_machine;
+pub mod variant;
+pub mod wishes;
 
 use std::rc::Rc;
 
@@ -36,6 +38,8 @@ pub use measure::Measure;
 pub use notice::Notice;
 pub use opened::{Opened, Part};
 pub use point_figure::PointFigure;
+pub use variant::{Beside, Variant, Variants};
+pub use wishes::LimitFigure;
 
 use notice::refused;
 
@@ -85,6 +89,8 @@ pub struct State {
     pub filed: Option<Rc<Job>>,
     /// Panels that are open.
     pub opened: Opened,
+    /// Blades beside the drawn one.
+    pub variants: Variants,
 }
 
 impl State {
@@ -107,6 +113,7 @@ impl State {
             notice: None,
             filed: None,
             opened: Opened::default(),
+            variants: Variants::default(),
         }
     }
 
@@ -173,8 +180,32 @@ impl State {
             Action::Say(notice) => self.notice = Some(notice),
             Action::Dismiss => self.notice = None,
             Action::Unfold(part, open) => self.opened = self.opened.with(part, open),
+            Action::Beside(what) => self.beside(what),
             Action::Saved => self.filed = Some(self.job().clone()),
         }
+    }
+
+    fn beside(&mut self, what: Beside) {
+        match what {
+            Beside::Keep(variant) => self.variants.keep(variant),
+            Beside::Compare(which) => self.variants.compared = which,
+            Beside::Drop(i) => self.variants.drop(i),
+            Beside::Use(i) => self.use_variant(i),
+        }
+    }
+
+    /// The blade takes the place of the drawn one, if the job allows it as it stands now.
+    fn use_variant(&mut self, i: usize) {
+        let Some(variant) = self.variants.all.get(i).cloned() else { return };
+        let next = variant.of(self.job());
+        if let Some(problem) = next.check().first() {
+            let title = "The blade was not taken; the drawn one stays.".into();
+            self.notice = Some(Notice { title, lines: vec![problem.to_string()] });
+            return;
+        }
+        self.drafts.clear();
+        self.step(format!("use {}", variant.name), next);
+        self.variants.compared = None;
     }
 
     /// Picking millimetres or inches leaves the other units free to suit the next job.
@@ -329,6 +360,7 @@ impl State {
             self.units = Units { length: self.units.length, ..Units::suiting(job.propeller.diameter_m) };
         }
         (self.point, self.station) = places(&job);
+        self.variants = Variants::default();
         self.history.step(step, job);
         (self.drag, self.notice) = (None, None);
         self.drafts.clear();

@@ -25,6 +25,17 @@ pub fn fit() -> Html {
     }
 }
 
+/// Before a shaped blade is made.
+pub fn shape() -> Html {
+    html! {
+        <aside class="caution">
+            <b>{ "Before you act. " }</b>
+            { "Strength is not judged here: a blade that comes out thinner or narrower than a proven one needs its own check of \
+               strength, flutter and balance, and a licensed inspector's or engineer's word where the rules ask for it." }
+        </aside>
+    }
+}
+
 /// At the foot of the page.
 pub fn foot() -> Html {
     html! {

@@ -18,6 +18,7 @@ pub mod points;
 pub mod reading;
 pub mod room;
 pub mod sections;
+pub mod shape;
 pub mod steps;
 pub mod units;
 pub mod verdict;

@@ -19,6 +19,7 @@ use super::points::Points;
 use super::reading::{Lying, MapReading, Standing, StationReading};
 use super::room::{Room, use_room};
 use super::sections::{self, Sections};
+use super::shape::{self, ShapePanel};
 use super::steps::Steps;
 use super::verdict::Verdict;
 use super::{Seen, caution, use_act};
@@ -51,7 +52,7 @@ pub fn Page(props: &PageProps) -> Html {
             if let Some(notice) = &state.notice { <Said notice={notice.clone()} /> }
             <main>
                 if narrow { <Lying ..props.clone() /> }
-                if let Some(result) = &*now.point { <Verdict result={result.clone()} units={state.units} /> }
+                if let Some(result) = &*now.point { <Verdict result={result.clone()} units={state.units} beside={now.beside.clone()} /> }
                 <div class="sheet" style={format!("--chip-rows: {}", chip_rows(props))}>
                     if !narrow { <Standing ..props.clone() /> }
                     <div class="work">
@@ -105,9 +106,9 @@ fn Panels(props: &PageProps) -> Html {
                 <BladeSettings state={state.part(same_settings)} />
                 <div class="blade-grid">
                     <div class="blade-table">
-                        <StationTable state={state.part(same_table)} drawn={now.drawn.clone()} point={now.point.clone()} points={later.points.clone()} />
+                        <StationTable state={state.part(same_table)} drawn={now.drawn.clone()} point={now.point.clone()} points={later.points.clone()} beside={now.beside.clone()} />
                     </div>
-                    <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} />
+                    <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} beside={now.beside.clone()} />
                 </div>
             </Panel>
             <Panel id="fit" number={5} title="Fit" open={*open} onunfold={act.on(|open| Action::Unfold(Part::Fit, open))}
@@ -115,14 +116,17 @@ fn Panels(props: &PageProps) -> Html {
                 <FitPanel state={state.part(fit::same_fit)} envelope={later.envelope.clone()} points={later.points.clone()} limit_rpm={limit_rpm(later)}
                     take_off={later.take_off} ceilings={later.ceilings} worth={later.worth.clone()} />
             </Panel>
-            <Panel id="coefficients" number={6} title="Coefficients" open={*open}
+            <Panel id="shape" number={6} title="Shape" result={shape::in_a_line(state)} open={*open}>
+                <ShapePanel state={state.part(shape::same_shape)} rig={later.rig.clone()} />
+            </Panel>
+            <Panel id="coefficients" number={7} title="Coefficients" open={*open}
                 result={coefficients::in_a_line((*now.point).as_ref())}>
                 <Coefficients curves={later.curves.clone()} point={later.selected()} units={state.units} />
             </Panel>
-            <Panel id="sections" number={7} title="Sections" result={sections::in_a_line(state)} open={*open}>
+            <Panel id="sections" number={8} title="Sections" result={sections::in_a_line(state)} open={*open}>
                 <Sections state={state.part(sections::same)} rig={later.rig.clone()} points={later.points.clone()} />
             </Panel>
-            <Panel id="method" number={8} title="How it is computed" result={method_line(props)} open={*open}>
+            <Panel id="method" number={9} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>

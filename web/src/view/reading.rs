@@ -16,9 +16,9 @@ use super::page::PageProps;
 use super::room::{Room, use_room};
 use super::verdict::Brief;
 use super::{Act, Seen, use_act};
-use crate::app::Later;
+use crate::app::{Compared, Later};
 use crate::blade_view::{
-    BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
+    BladeRack, BladeStrip, DepartureChart, FlightMark, Ghost, Planform, RadiusAxis, StationCard,
 };
 use crate::number::with_unit;
 use crate::state::{Action, State};
@@ -94,12 +94,23 @@ fn blade(props: &PageProps, lying: bool, on_select: &Callback<usize>) -> Html {
     let shape = Rc::new(Planform::of(&rig.0.rotor.blade));
     let stations = Rc::new(stations(props));
     let (length, selected) = (state.units.unit(Quantity::Length), state.station);
+    let ghost = props.now.beside.as_deref().map(ghost);
     if lying {
-        return html! { <BladeStrip {shape} {stations} {length} {selected} on_select={on_select.clone()} /> };
+        return html! { <BladeStrip {shape} {stations} {length} {selected} {ghost} on_select={on_select.clone()} /> };
     }
     let leading_right = state.job().propeller.rotation == Rotation::ClockwiseFromBehind;
     html! {
-        <BladeRack {shape} {stations} axis={axis(state)} {length} {selected} {leading_right} on_select={on_select.clone()} />
+        <BladeRack {shape} {stations} axis={axis(state)} {length} {selected} {leading_right} {ghost} on_select={on_select.clone()} />
+    }
+}
+
+/// The blade compared, as the drawings have it.
+fn ghost(beside: &Compared) -> Ghost {
+    let stations = beside.point.iter().flat_map(|r| &r.stations);
+    Ghost {
+        name: beside.name.clone().into(),
+        points: stations.filter_map(|s| Some((s.radius_m, s.departure_deg?))).collect(),
+        shape: Some(Rc::new(Planform::of(&beside.rig.0.rotor.blade))),
     }
 }
 

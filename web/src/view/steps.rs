@@ -4,16 +4,17 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 9] = [
+pub const PARTS: [(&str, &str); 10] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
     ("points", "3 Flight points"),
     ("blade", "4 Blade"),
     ("fit", "5 Fit"),
-    ("coefficients", "6 Coefficients"),
-    ("sections", "7 Sections"),
-    ("method", "8 Method"),
+    ("shape", "6 Shape"),
+    ("coefficients", "7 Coefficients"),
+    ("sections", "8 Sections"),
+    ("method", "9 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.

@@ -1,7 +1,10 @@
 //! The few figures that decide, for the flight point selected.
 
 use spokeshave::result::{Note, PointResult, State as Answer, StationResult};
+use std::rc::Rc;
 use yew::prelude::*;
+
+use crate::app::Compared;
 
 use crate::number::{NO_FIGURE, figure, fixed, fixed_or_none, signed, with_unit};
 use crate::units::{Quantity, Units};
@@ -22,12 +25,20 @@ pub struct Cell {
 impl Cell {
     /// The figure large under its name.
     pub fn item(self) -> Html {
+        self.beside(None)
+    }
+
+    /// The same with the figure of the blade compared in grey.
+    fn beside(self, other: Option<String>) -> Html {
         html! {
             <li>
                 <span class="verdict-name">{ self.name }</span>
                 <span class="verdict-figure"><b>{ self.figure }</b>
                     if !self.unit.is_empty() { <span class="unit">{ self.unit }</span> }
                 </span>
+                if let Some(other) = other {
+                    <span class="verdict-beside"><span class="unseen">{ "Compared: " }</span>{ other }</span>
+                }
                 <span class="verdict-more">{ self.more }</span>
             </li>
         }
@@ -41,6 +52,9 @@ pub struct VerdictProps {
     pub result: PointResult,
     /// Units shown.
     pub units: Units,
+    /// The blade compared: its name and the same flight point.
+    #[prop_or_default]
+    pub beside: Option<Rc<Compared>>,
 }
 
 /// The figures in a row; a sentence where there is no answer.
@@ -55,13 +69,26 @@ pub fn Verdict(props: &VerdictProps) -> Html {
             </section>
         };
     }
-    let cells = cells(props.units, result).into_iter().map(Cell::item);
+    let others = props.beside.as_ref().map(|beside| others(props.units, beside.point.as_ref()));
+    let cells = cells(props.units, result).into_iter().enumerate().map(|(i, cell)| {
+        let other =
+            others.as_ref().map(|all| all.get(i).map_or_else(|| NO_FIGURE.into(), |o| o.figure.clone()));
+        cell.beside(other)
+    });
     html! {
         <section aria-label={format!("Verdict at {}", result.name)}>
             <ul class="verdict">{ for cells }</ul>
+            if let Some(beside) = &props.beside {
+                <p class="verdict-notes">{ format!("Grey: {}. ", beside.name) }<a href="#shape">{ "Compare another" }</a></p>
+            }
             <Notes notes={result.notes.clone()} />
         </section>
     }
+}
+
+/// The figures of the blade compared; none without an answer.
+fn others(units: Units, beside: Option<&PointResult>) -> Vec<Cell> {
+    beside.filter(|r| r.state == Answer::Ok).map_or_else(Vec::new, |r| cells(units, r))
 }
 
 #[derive(Properties, PartialEq)]

@@ -1,8 +1,8 @@
 //! Where figures and words stand on the map without hiding one another.
 
-use super::field::Ring;
 use super::frame::Frame;
 use crate::chart::clear::Clear;
+use crate::chart::field::Ring;
 use crate::chart::number::signed;
 use ndarray::Array2;
 use spokeshave::rotor::{DepartureMap, MapCell};

@@ -1,10 +1,9 @@
 //! What the map is painted of, as path data.
 
-use super::field::{Field, Ring};
 use super::frame::Frame;
 use super::labels::{Label, label_levels, open_space, roomiest};
 use crate::chart::departure::{BREAKS_DEG, style_of_class};
-use crate::chart::path::Path;
+use crate::chart::field::{Field, Ring, data};
 use spokeshave::rotor::{DepartureMap, MapCell};
 
 /// The share of the best lift-to-drag that the working band keeps.
@@ -50,7 +49,7 @@ impl Layers {
     /// The layers of a map. Labels keep clear of the flight points, at the pixels `marks` along, and stand between the
     /// lines of the stations, at the pixels `levels` down, where they can.
     pub(super) fn new(map: &DepartureMap, frame: &Frame, marks: &[f64], levels: &[f64]) -> Option<Self> {
-        let departure = Field::new(map, frame, |c| c.departure_deg)?;
+        let departure = field(map, frame, |c| c.departure_deg)?;
         let rings: Vec<Vec<Ring>> = BREAKS_DEG.iter().map(|b| departure.rings(*b)).collect();
         let best = departure.rings(0.0);
         let stalled = |c: &MapCell| c.past_stall_deg.is_some_and(|past| past > 0.0);
@@ -86,7 +85,7 @@ fn fill(index: usize, level: f64, rings: &[Ring]) -> Fill {
 }
 
 fn contour(map: &DepartureMap, frame: &Frame, of: impl Fn(&MapCell) -> Option<f64>, level: f64) -> String {
-    Field::new(map, frame, of).map_or_else(String::new, |field| data(&field.rings(level)))
+    field(map, frame, of).map_or_else(String::new, |field| data(&field.rings(level)))
 }
 
 fn missing(map: &DepartureMap, frame: &Frame) -> String {
@@ -96,13 +95,12 @@ fn missing(map: &DepartureMap, frame: &Frame) -> String {
     contour(map, frame, |c| Some(if c.departure_deg.is_some() { 0.0 } else { 1.0 }), 0.5)
 }
 
-fn data(rings: &[Ring]) -> String {
-    let mut path = Path::default();
-    for ring in rings {
-        path.run(ring.iter().take(ring.len().saturating_sub(1)).copied());
-        path.close();
-    }
-    path.into_string()
+/// One figure of the map, for contours.
+fn field(map: &DepartureMap, frame: &Frame, of: impl Fn(&MapCell) -> Option<f64>) -> Option<Field> {
+    let speed = frame.speed();
+    let xs = map.airspeeds_m_s.iter().map(|v| speed.px(*v)).collect();
+    let ys = map.radii_m.iter().map(|r| frame.axis.y(*r)).collect();
+    Field::new(&map.cells.map(of), xs, ys)
 }
 
 #[cfg(test)]
@@ -120,6 +118,38 @@ mod tests {
         assert!(!layers.missing.is_empty(), "the gap is shown");
         assert!(layers.labels.iter().any(|l| l.text == "0") && layers.labels.iter().any(|l| l.text == "+4"));
         assert!(layers.stalled_at.is_some());
+    }
+
+    #[test]
+    fn a_contour_lies_where_the_figure_has_its_level() {
+        let (map, frame) = (sample(), frame());
+        let grid = field(&map, &frame, |c| c.departure_deg).unwrap();
+        let mut seen = 0;
+        for [x, y] in grid.rings(2.0).concat() {
+            let inside = (15.0..405.0).contains(&x) && frame.axis.y(0.66) < y && y < frame.axis.y(0.14);
+            // Row 3 has a gap, filled from beside.
+            if inside && (y - frame.axis.y(map.radii_m[3])).abs() > 34.0 {
+                let departure = 14.0 - 2.4 * frame.speed().value(x) / 5.0
+                    + 0.3 * ((frame.axis.scale().value(y) - 0.1) / 0.05 - 0.5);
+                assert!((departure - 2.0).abs() < 0.02, "{x} {y}: {departure}");
+                seen += 1;
+            }
+        }
+        assert!(seen >= 6, "{seen}");
+    }
+
+    #[test]
+    fn contours_end_outside_the_frame() {
+        let grid = field(&sample(), &frame(), |c| c.departure_deg).unwrap();
+        let all = grid.rings(2.0).concat();
+        let least = |i: usize| all.iter().map(|at| at[i]).fold(f64::MAX, f64::min);
+        let most = |i: usize| all.iter().map(|at| at[i]).fold(f64::MIN, f64::max);
+        let axis = frame().axis;
+        assert!(
+            least(0) < 10.0 && least(1) < axis.top_px && most(1) > axis.hub_px,
+            "all but the fast side is hard"
+        );
+        assert!(most(0) < 410.0);
     }
 
     #[test]

@@ -1,6 +1,5 @@
 //! Departure over radius and airspeed, on the radius axis of the blade beside it.
 
-mod field;
 mod frame;
 mod key;
 mod labels;

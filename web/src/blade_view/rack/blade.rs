@@ -36,10 +36,17 @@ pub(super) fn drawing(layout: &Layout, props: &BladeRackProps) -> Html {
             <path class="hub" d={hub(layout, &props.shape)} />
             { bands(layout, props) }
             <path class="outline" d={props.shape.outline(|r, o| layout.place(r, o))} />
+            { ghost(layout, props) }
             { centre_lines(layout) }
             { chord_scale(layout) }
         </g>
     }
+}
+
+/// The outline of the blade compared.
+fn ghost(layout: &Layout, props: &BladeRackProps) -> Option<Html> {
+    let shape = props.ghost.as_ref()?.shape.as_ref()?;
+    Some(html! { <path class="ghost" d={shape.outline(|r, o| layout.place(r, o))} /> })
 }
 
 /// The radius at the tip, where no tick stands in its way.

@@ -21,6 +21,8 @@ pub struct Ghost {
     pub name: AttrValue,
     /// Radius (m) and departure (degrees).
     pub points: Vec<(f64, f64)>,
+    /// Its outline.
+    pub shape: Option<Rc<Planform>>,
 }
 
 /// Properties of [`BladeRack`].

@@ -29,6 +29,9 @@ pub struct StationRowProps {
     pub departures: Vec<Option<f64>>,
     /// Departure at the flight point selected, degrees.
     pub now: Option<f64>,
+    /// What the blade compared has here.
+    #[prop_or_default]
+    pub beside: Option<String>,
 }
 
 /// A row of boxes and departures; under it, what was refused.
@@ -55,6 +58,7 @@ pub fn StationRow(props: &StationRowProps) -> Html {
                 <BoxCells boxes={boxes.clone()} />
                 if columns.sections { <td><SectionPick index={i} state={state.clone()} /></td> }
                 <DepartureCells points={columns.points.clone()} departures={props.departures.clone()} point={state.point} now={props.now} />
+                if columns.beside.is_some() { <td class="beside">{ props.beside.clone() }</td> }
             </tr>
             if !wrong.is_empty() { <tr class="messages"><td colspan="16">{ messages }</td></tr> }
         </>

@@ -10,8 +10,11 @@ use yew::prelude::*;
 use super::head::TableHead;
 use super::one_section;
 use super::row::StationRow;
+use crate::app::Compared;
+use crate::number::{figure, fixed, signed_or_none};
 use crate::state::choice::FEWEST_STATIONS;
 use crate::state::{Action, Choice, Running};
+use crate::units::Quantity;
 use crate::view::{Seen, use_act};
 
 /// Most flight points that get a column.
@@ -28,6 +31,9 @@ pub struct StationTableProps {
     pub point: Rc<Option<PointResult>>,
     /// Every flight point; may be a frame old.
     pub points: Vec<Rc<Option<PointResult>>>,
+    /// The blade compared.
+    #[prop_or_default]
+    pub beside: Option<Rc<Compared>>,
 }
 
 /// Which columns of the table there are.
@@ -39,6 +45,8 @@ pub struct Columns {
     pub face: bool,
     /// Whether stations differ in section.
     pub sections: bool,
+    /// Name of the blade compared.
+    pub beside: Option<String>,
 }
 
 /// The table and what is done with its rows.
@@ -50,6 +58,7 @@ pub fn StationTable(props: &StationTableProps) -> Html {
         points: shown_points(job.flight_points.len(), state.point),
         face: props.drawn.iter().any(|d| d.face_angle_deg.is_some()),
         sections: *open || one_section(job).is_none(),
+        beside: props.beside.as_ref().map(|b| b.name.clone()),
     };
     let departures = |i: usize| -> Vec<Option<f64>> {
         columns.points.iter().map(|&p| departure(result(props, p), i)).collect()
@@ -57,7 +66,7 @@ pub fn StationTable(props: &StationTableProps) -> Html {
     let rows = (0..props.drawn.len()).rev().map(|i| {
         html! {
             <StationRow key={i} index={i} state={state.clone()} drawn={props.drawn.clone()} columns={columns.clone()}
-                departures={departures(i)} now={departure(props.point.as_ref().as_ref(), i)} />
+                departures={departures(i)} beside={beside(props, i)} now={departure(props.point.as_ref().as_ref(), i)} />
         }
     });
     let by_station = {
@@ -101,6 +110,15 @@ fn result(props: &StationTableProps, point: usize) -> Option<&PointResult> {
 
 fn departure(result: Option<&PointResult>, station: usize) -> Option<f64> {
     result?.stations.get(station)?.departure_deg
+}
+
+/// Chord, angle to the chord line and departure of the station of the blade compared.
+fn beside(props: &StationTableProps, station: usize) -> Option<String> {
+    let other = props.beside.as_ref()?;
+    let drawn = other.drawn.get(station)?;
+    let departure = departure(other.point.as_ref(), station);
+    let chord = figure(props.state.units, Quantity::Length, Some(drawn.chord_m));
+    Some(format!("{chord}, {}°, {}", fixed(drawn.angle_deg, 1), signed_or_none(departure, 1)))
 }
 
 /// The first few, and the one selected.

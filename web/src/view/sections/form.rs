@@ -3,7 +3,7 @@
 use spokeshave::section::make::{Angles, Plan, ROUGH_NOSE, Request, proposed_reynolds, proposed_thickness};
 use spokeshave::section::outline::Outline;
 
-use crate::background::order::Order;
+use crate::background::polars::Order;
 
 /// A box of the form.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]

@@ -13,7 +13,7 @@ use super::drawing::Drawing;
 use super::form::{Form, Place};
 use super::progress::Progress;
 use crate::background::hand::{Hand, Heard};
-use crate::background::order::{Report, Step};
+use crate::background::polars::{Report, Step};
 use crate::number::fixed;
 use crate::state::{Action, Choice, Running};
 use crate::view::blade::section_names;
@@ -110,7 +110,7 @@ fn use_start(
         run.set(Run::At(None));
         let begun = Date::now();
         let (act, told) = (act.clone(), run.clone());
-        let heard = move |heard: Heard| {
+        let heard = move |heard: Heard<Report>| {
             told.set(match heard {
                 Heard::Report(Report::Step(step)) => Run::At(Some(step)),
                 Heard::Report(Report::Refused(why)) => Run::Stopped(crate::view::form::capital(&why)),
@@ -126,7 +126,7 @@ fn use_start(
                 }
             });
         };
-        let given = Hand::give(&order, heard);
+        let given = Hand::give("make_polars", &order, heard);
         if given.is_none() {
             run.set(Run::Stopped("This browser refuses to start a worker for it.".into()));
         }

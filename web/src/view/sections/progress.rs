@@ -3,7 +3,7 @@
 use yew::prelude::*;
 
 use super::charts::short;
-use crate::background::order::Step;
+use crate::background::polars::Step;
 use crate::number::fixed;
 
 /// Properties of [`Progress`].

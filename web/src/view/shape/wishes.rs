@@ -1,0 +1,110 @@
+//! What a search is asked for: what counts at each flight point, limits, what stays as drawn.
+
+use spokeshave::job::{Aim, Figure, FlightPoint, Held, Setting, Wishes};
+use spokeshave::shape::Wish;
+use yew::prelude::*;
+
+use super::figures::{ALL, name};
+use crate::app::RigRef;
+use crate::number::fixed;
+use crate::state::{Action, Choice, Field, LimitFigure, Running};
+use crate::view::form::{Labelled, Pick, Shown, Switch, capital};
+use crate::view::{Act, Seen, use_act};
+
+/// Properties of [`WishBoxes`].
+#[derive(Properties, PartialEq)]
+pub(super) struct WishBoxesProps {
+    pub(super) state: Seen,
+    pub(super) rig: RigRef,
+}
+
+/// Weights to pick from.
+const WEIGHTS: [f64; 6] = [0.25, 0.5, 1.0, 2.0, 3.0, 5.0];
+const HELD: [(Held, &str); 4] =
+    [(Held::Diameter, "Diameter"), (Held::Pitch, "Pitch"), (Held::Twist, "Twist"), (Held::Chord, "Chord")];
+
+/// The boxes, folded away.
+#[component]
+pub(super) fn WishBoxes(props: &WishBoxesProps) -> Html {
+    let act = use_act();
+    let state = &props.state;
+    let aims = use_memo(props.rig.clone(), |rig| Wish::of(&rig.0).aims);
+    let points = state.job().flight_points.iter().map(|point| point_row(&act, point, &aims));
+    let limits = LimitFigure::ALL.into_iter().map(|figure| {
+        html! { <Labelled shown={Shown::of(state, &[], Field::Limit(figure))} label={capital(figure.name())} hint="no limit" /> }
+    });
+    let none = Wishes::default();
+    let wishes = state.job().wishes.as_ref().unwrap_or(&none);
+    let held = HELD.into_iter().map(|(what, label)| {
+        let onswitch = act.on(move |on| Action::Choose(Choice::Hold(what, on), Running::default()));
+        html! { <Switch {label} on={wishes.held.contains(&what)} {onswitch} /> }
+    });
+    html! {
+        <details class="wishes unprinted">
+            <summary>{ "What counts, limits, what stays as drawn" }</summary>
+            <div class="wish-grid">
+                <fieldset><legend>{ "What counts" }</legend>{ for points }</fieldset>
+                <fieldset><legend>{ "Limits of the finished propeller" }</legend><div class="settings">{ for limits }</div></fieldset>
+                <fieldset class="held"><legend>{ "The search leaves as drawn" }</legend>{ for held }</fieldset>
+            </div>
+        </details>
+    }
+}
+
+/// What may count at a flight point.
+fn possible(point: &FlightPoint) -> Vec<Figure> {
+    let top = point.airspeed_m_s.is_none();
+    let level = point.setting == Setting::Level {};
+    let at_rest = point.airspeed_m_s == Some(0.0);
+    let may = |figure: &Figure| match figure {
+        Figure::AirspeedMS => top,
+        Figure::Efficiency => !at_rest,
+        Figure::RateOfClimbMS => !top && !level && !at_rest,
+        Figure::ThrustN => !top && !level,
+        _ => true,
+    };
+    ALL.into_iter().filter(may).collect()
+}
+
+fn point_row(act: &Act, point: &FlightPoint, aims: &[Aim]) -> Html {
+    let figures = possible(point);
+    let place = aims.iter().position(|a| a.flight_point == point.name);
+    let aim = place.map(|i| &aims[i]);
+    let mut options: Vec<AttrValue> = vec!["does not count".into()];
+    options.extend(figures.iter().map(|f| AttrValue::from(name(*f))));
+    let picked = aim.map_or(Some(0), |a| figures.iter().position(|f| *f == a.figure).map(|i| i + 1));
+    let changed = |with: Option<Aim>| {
+        let mut next = aims.to_vec();
+        match (place, with) {
+            (Some(i), Some(aim)) => next[i] = aim,
+            (Some(i), None) => drop(next.remove(i)),
+            (None, with) => next.extend(with),
+        }
+        next
+    };
+    let weight = aim.map_or(1.0, |a| a.weight);
+    let with = |figure: Option<Figure>| {
+        changed(figure.map(|figure| Aim { flight_point: point.name.clone(), figure, weight }))
+    };
+    let choices: Vec<Vec<Aim>> =
+        std::iter::once(None).chain(figures.iter().copied().map(Some)).map(with).collect();
+    let weighted: Vec<Vec<Aim>> =
+        WEIGHTS.iter().map(|w| changed(aim.map(|a| Aim { weight: *w, ..a.clone() }))).collect();
+    let weights: Vec<AttrValue> = WEIGHTS.iter().map(|w| format!("weight {}", fixed(*w, 2)).into()).collect();
+    let now = WEIGHTS.iter().position(|w| (w - weight).abs() < 1e-9);
+    html! {
+        <div class="wish">
+            <Pick label={point.name.clone()} {options} {picked} onpick={picked_of(act, choices)} />
+            if aim.is_some() {
+                <Pick label={format!("Weight of {}", point.name)} options={weights} picked={now} onpick={picked_of(act, weighted)} bare=true />
+            }
+        </div>
+    }
+}
+
+fn picked_of(act: &Act, choices: Vec<Vec<Aim>>) -> Callback<usize> {
+    act.on(move |i: usize| match choices.get(i) {
+        Some(aims) => Action::Choose(Choice::Aims(aims.clone()), Running::default()),
+        None => Action::Dismiss,
+    })
+}
