@@ -5,7 +5,8 @@ use spokeshave::result::{Brief, Figure, Limit, Origin, State, Tolerance};
 use spokeshave::rig::Rig;
 use spokeshave::shape::adkins_liebeck::Wanted;
 use spokeshave::shape::{
-    Lift, LossTask, PitchBy, ShapeError, brief, error_costs, least_loss, pitch_diameter, twist,
+    Lift, LossTask, PitchBy, ShapeError, TwistBy, brief, error_costs, least_loss, pitch_diameter, twist,
+    twist_by,
 };
 
 fn demo(index: usize) -> Rig {
@@ -61,6 +62,43 @@ fn a_twist_along_several_points_lies_between_those_of_each() {
     assert!(both.iter().zip(&cruise).any(|(a, b)| (a - b).abs() > 0.05));
 }
 
+/// Of the two twists along climb and top speed, each is the better one by its own measure.
+#[test]
+fn a_twist_by_loss_loses_less_and_one_by_departure_departs_less() {
+    let rig = demo(0);
+    let weights = [0.0, 1.0, 0.0, 1.0];
+    let measures = |by| {
+        let job = twist_by(&rig, &weights, by).unwrap().job;
+        let rig = Rig::new(&job).unwrap();
+        let points = [rig.point(1).unwrap(), rig.point(3).unwrap()];
+        let judged = points.iter().flat_map(|p| &p.stations).filter(|s| judged(s.radius_fraction));
+        judged.fold((0.0, 0.0), |(squares, lost), s| {
+            (squares + s.departure_deg.unwrap().powi(2), lost + 1.0 - s.share_of_best.unwrap())
+        })
+    };
+    let (by_departure, by_loss) = (measures(TwistBy::Departure), measures(TwistBy::Loss));
+    assert!(by_departure.0 < by_loss.0 && by_loss.1 < by_departure.1, "{by_departure:?} {by_loss:?}");
+}
+
+#[test]
+fn stations_of_a_governed_propeller_depart_alike() {
+    let mut job = demo(0).job;
+    job.propeller.pitch_control =
+        PitchControl::ConstantSpeed { rpm: 2500.0, turn_min_deg: -10.0, turn_max_deg: 20.0 };
+    let shaped = twist(&Rig::new(&job).unwrap(), &[0.0, 1.0, 0.0, 0.0]).unwrap();
+    assert!(shaped.result.settled);
+    let result = Rig::new(&shaped.job).unwrap().point(1).unwrap();
+    assert!((result.rpm.unwrap() - 2500.0).abs() < 1e-6);
+    let all: Vec<f64> = result
+        .stations
+        .iter()
+        .filter(|s| judged(s.radius_fraction))
+        .map(|s| s.departure_deg.unwrap())
+        .collect();
+    let mean = all.iter().sum::<f64>() / all.len() as f64;
+    assert!(all.iter().all(|d| (d - mean).abs() < 0.05), "{all:?}");
+}
+
 #[test]
 fn a_station_near_the_tip_is_held_at_its_neighbours_pitch() {
     let mut job = demo(0).job;
@@ -112,6 +150,28 @@ fn the_least_loss_blade_beats_the_drawn_one_at_its_own_point() {
     }
 }
 
+/// Chords that can be carved: no jump between neighbours, and a tip that narrows, at little cost in efficiency.
+#[test]
+fn the_chords_of_a_least_loss_blade_run_smoothly_at_low_reynolds_numbers() {
+    for (d, p) in [(1, 1), (1, 2), (2, 2)] {
+        let rig = demo(d);
+        let task = LossTask { point: p, ..LossTask::default() };
+        let smooth = least_loss(&rig, &task).unwrap();
+        let rough = least_loss(&rig, &LossTask { by_station: true, ..task }).unwrap();
+        let chords: Vec<f64> = smooth.result.stations.iter().map(|s| s.chord_m).collect();
+        let turns = chords.windows(3).filter(|c| (c[1] - c[0]) * (c[2] - c[1]) < 0.0).count();
+        assert!(turns <= 2, "{} {p}: {chords:?}", rig.job.title);
+        assert!(chords.last() < chords.iter().rev().nth(1), "the tip narrows");
+        let efficiency = |s: &spokeshave::shape::Shaped<spokeshave::result::LeastLoss>| s.result.efficiency;
+        assert!(
+            efficiency(&smooth) > 0.99 * efficiency(&rough),
+            "{} {}",
+            efficiency(&smooth),
+            efficiency(&rough)
+        );
+    }
+}
+
 /// Adkins and Liebeck's equations are those of the blade elements but for hub loss and the inflow angle in Prandtl's factor: without hub loss
 /// 0.2 % in thrust and power (own analysis). That takes stations close together and out to the tip, where the chord ends in nothing.
 #[test]
@@ -144,7 +204,8 @@ fn no_small_change_of_a_least_loss_blade_gains_anything_worth_having() {
     let mut job = demo(0).job;
     job.method.hub_loss = false;
     let rig = Rig::new(&job).unwrap();
-    let best = LossTask { point: 2, lift: Lift::BestIncidence, ..LossTask::default() };
+    let best =
+        LossTask { point: 2, lift: Lift::BestIncidence, stations_as_drawn: true, ..LossTask::default() };
     let shaped = least_loss(&rig, &best).unwrap();
     let mut held = shaped.job.clone();
     held.propeller.pitch_control =
@@ -172,7 +233,13 @@ fn no_small_change_of_a_least_loss_blade_gains_anything_worth_having() {
 #[test]
 fn what_an_error_costs_agrees_with_blades_analysed_by_themselves() {
     let rig = demo(0);
-    let tolerance = Tolerance { angle_deg: 0.25, chord_mm: 0.5, thickness_mm: 0.3 };
+    let tolerance = Tolerance {
+        angle_deg: 0.25,
+        chord_mm: 0.5,
+        thickness_mm: 0.3,
+        lift_percent: 3.0,
+        drag_percent: 10.0,
+    };
     let costs = error_costs(&rig, tolerance).unwrap();
     let cruise =
         |figure| costs.costs.iter().find(|c| c.flight_point == "Cruise" && c.figure == figure).unwrap();
@@ -192,6 +259,11 @@ fn what_an_error_costs_agrees_with_blades_analysed_by_themselves() {
         assert!((told - direct).abs() < tight * scale, "{figure:?}: {told} {direct}");
         assert!(cost.band_worst >= cost.band_independent && cost.band_independent > 0.0);
     }
+    // More drag costs power and efficiency, and the band is that of both doubts.
+    let (power, efficiency) = (cruise(Figure::PowerW), cruise(Figure::Efficiency));
+    let (per_lift, per_drag) = (power.per_percent_lift.unwrap(), power.per_percent_drag.unwrap());
+    assert!(per_drag > 0.0 && efficiency.per_percent_drag.unwrap() < 0.0);
+    assert!((power.band_polars - (3.0 * per_lift).hypot(10.0 * per_drag)).abs() < 1e-9);
     assert!(error_costs(&rig, Tolerance { angle_deg: f64::NAN, ..tolerance }).is_err());
 }
 

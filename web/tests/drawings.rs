@@ -1,19 +1,22 @@
 //! Every drawing, rendered to text without a browser, for every example and flight point.
 
 use spokeshave::fit::Along;
-use spokeshave::job::{DEMOS, Job};
+use spokeshave::job::{DEMOS, Figure, Job};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rig::Rig;
+use spokeshave_web::app::RigRef;
+use spokeshave_web::background::shape::{Order, Report, Task, carried_out};
 use spokeshave_web::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
 };
 use spokeshave_web::chart::line::{Axis, LineChart, Series};
 use spokeshave_web::chart::unit::Unit;
 use spokeshave_web::results::Offered;
-use spokeshave_web::state::{Action, State};
+use spokeshave_web::state::{Action, Beside, State, Variant};
 use spokeshave_web::view::Seen;
 use spokeshave_web::view::fit::FitPanel;
 use spokeshave_web::view::machine::{AircraftPanel, EnginePanel};
+use spokeshave_web::view::shape::{ChartDrawing, CostDrawings, ShapePanel};
 use std::rc::Rc;
 use yew::prelude::*;
 
@@ -121,6 +124,32 @@ fn SpeedRange(shown: &Shown) -> Html {
     html! { <FitPanel {state} envelope={Some(Rc::new(envelope))} {points} {limit_rpm} /> }
 }
 
+fn shaped(state: &State, task: Task) -> Report {
+    carried_out(&Order { job: state.job().to_json(), task }, |_| {})
+}
+
+#[component]
+fn Shape(shown: &Shown) -> Html {
+    let mut state = state(shown);
+    let count = state.job().flight_points.len();
+    let alone = (0..count).map(|i| f64::from(u8::from(i == shown.point))).collect();
+    if let Report::Blade(propeller, said) = shaped(&state, Task::Twist(alone)) {
+        let variant = Variant { name: "a twisted one".into(), propeller: *propeller, said };
+        state = state.after(Action::Beside(Beside::Keep(variant)));
+    }
+    let rig = Rc::new(Rig::new(state.job()).expect("examples are valid"));
+    let chart = shaped(&state, Task::Chart(shown.point, Figure::Efficiency, 6));
+    let costs = shaped(&state, Task::Errors([0.25, 0.5, 0.3]));
+    let (state, units) = (Seen::new(Rc::new(state.clone())), state.units);
+    html! {
+        <>
+            <ShapePanel state={state.clone()} rig={Some(RigRef(rig.clone()))} />
+            if let Report::Chart(chart) = chart { <ChartDrawing chart={Rc::new(*chart)} rig={RigRef(rig)} {units} /> }
+            if let Report::Errors(costs) = costs { <CostDrawings {state} costs={Rc::new(costs)} /> }
+        </>
+    }
+}
+
 #[component]
 fn BrokenCurve() -> Html {
     let axis = |words: &'static str| Axis { words: words.into(), unit: Unit::ratio(2), span: None };
@@ -215,5 +244,20 @@ fn the_speed_range_is_drawn_for_every_example_and_flight_point() {
         let movable = job.flight_points[shown.point].airspeed_m_s.is_some();
         assert_eq!(text.matches("role=\"slider\"").count(), usize::from(movable), "{shown:?}");
         assert_eq!(text.contains("Rate of climb"), shown.demo != 2, "{shown:?}");
+    }
+}
+
+#[test]
+fn shapes_are_drawn_for_every_example_and_flight_point() {
+    for shown in everywhere() {
+        let text = drawn::<Shape>(move || shown);
+        assert!(text.contains("Before you act") && text.contains("Least induced loss"), "{shown:?}");
+        assert!(text.contains("over pitch and diameter") && text.contains("drawn-mark"), "{shown:?}");
+        assert!(
+            text.contains("For each degree of blade angle") && text.contains("Errors apart"),
+            "{shown:?}"
+        );
+        let kept = text.contains("a twisted one") && text.contains("Use this blade");
+        assert!(kept || text.contains("No other blade is kept yet"), "{shown:?}");
     }
 }

@@ -34,7 +34,7 @@ impl Figure {
     }
 }
 
-/// Errors of carving: each station may be off by as much either way, on its own.
+/// Errors of carving, by which each station may be off either way, on its own; and doubt of the polars.
 #[derive(Clone, Copy, Debug, PartialEq, Serialize)]
 pub struct Tolerance {
     /// Blade angle, degrees.
@@ -43,6 +43,10 @@ pub struct Tolerance {
     pub chord_mm: f64,
     /// Thickness, mm.
     pub thickness_mm: f64,
+    /// All lift coefficients of the polars at once, percent.
+    pub lift_percent: f64,
+    /// All drag coefficients of the polars at once, percent.
+    pub drag_percent: f64,
 }
 
 /// One figure with what errors make of it.
@@ -64,6 +68,12 @@ pub struct Cost {
     pub band_worst: f64,
     /// Linear: root of the sum of squares over all stations, for errors that are independent of one another.
     pub band_independent: f64,
+    /// Change per percent of all lift coefficients; `None` where the changed polars have no answer.
+    pub per_percent_lift: Option<f64>,
+    /// Change per percent of all drag coefficients.
+    pub per_percent_drag: Option<f64>,
+    /// Linear: root of the sum of squares of what the doubt of lift and of drag make of it.
+    pub band_polars: f64,
 }
 
 /// What errors of the blade cost.

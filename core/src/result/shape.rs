@@ -85,7 +85,7 @@ pub struct Twist {
     pub weights: Vec<(String, f64)>,
     /// Stations from hub to tip.
     pub stations: Vec<TwistStation>,
-    /// Whether blade and settings agree: not so where a governor gives rpm and power both, for angles alone cannot then meet both.
+    /// Whether blade and settings agree. Where a governor holds the rpm, they do once all stations depart alike: the common departure is the governor's.
     pub settled: bool,
     /// Passes between blade and settings.
     pub passes: u32,

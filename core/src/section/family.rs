@@ -106,6 +106,14 @@ impl Family {
         Ok(Self { about, bins: bins_of(&grid), grid, nodes, polars: entries, rows: rows_of(&order) })
     }
 
+    /// The same with all lift and all drag coefficients times a factor: what an error of the polars would make of them.
+    #[must_use]
+    pub fn scaled(&self, lift: f64, drag: f64) -> Self {
+        let nodes =
+            self.nodes.iter().map(|[cl, dcl, cd, dcd]| [lift * cl, lift * dcl, drag * cd, drag * dcd]);
+        Self { nodes: nodes.collect(), ..self.clone() }
+    }
+
     /// Thickness ratios covered; `None` when the polars hold for one section only.
     #[must_use]
     pub fn thickness_range(&self) -> Option<(f64, f64)> {

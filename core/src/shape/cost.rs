@@ -1,6 +1,9 @@
 //! What an error of the blade costs: slopes by central differences through the whole fit, station by station.
 //!
 //! Every difference is a blade of its own, matched anew with engine and aircraft. The bands are linear in the errors: right for small ones.
+//! The polars are doubted as a whole: all lift, and all drag coefficients, too great or too small by the same share.
+
+use std::sync::Arc;
 
 use super::variant::{accepted, with_angles_of};
 use super::{ShapeError, brief};
@@ -13,6 +16,8 @@ const STEP_DEG: f64 = 0.1;
 /// Half the width of a difference, mm, or this share of the chord or thickness where that is less.
 const STEP_MM: f64 = 0.1;
 const STEP_SHARE: f64 = 0.02;
+/// Half the width of a difference of the polars, as a share.
+const STEP_POLARS: f64 = 0.01;
 
 /// Which figure of a station is off.
 #[derive(Clone, Copy)]
@@ -31,6 +36,8 @@ pub fn error_costs(rig: &Rig, tolerance: Tolerance) -> Result<ErrorCosts, ShapeE
         ("angle", tolerance.angle_deg),
         ("chord", tolerance.chord_mm),
         ("thickness", tolerance.thickness_mm),
+        ("lift", tolerance.lift_percent),
+        ("drag", tolerance.drag_percent),
     ];
     for (name, found) in parts {
         if !(0.0..=1e3).contains(&found) {
@@ -58,7 +65,17 @@ pub fn error_costs(rig: &Rig, tolerance: Tolerance) -> Result<ErrorCosts, ShapeE
             }
         }
     }
+    let doubted = |lift, drag| all(&with_polars(rig, lift, drag));
+    let lift = [doubted(1.0 - STEP_POLARS, 1.0), doubted(1.0 + STEP_POLARS, 1.0)];
+    let drag = [doubted(1.0, 1.0 - STEP_POLARS), doubted(1.0, 1.0 + STEP_POLARS)];
     for cost in &mut costs {
+        let point = points.iter().position(|p| p.name == cost.flight_point);
+        let at = |briefs: &[Brief]| point.and_then(|p| cost.figure.of(&briefs[p]));
+        let per_percent = |[less, more]: &[Vec<Brief>; 2]| {
+            at(more).zip(at(less)).map(|(a, b)| (a - b) / (200.0 * STEP_POLARS))
+        };
+        let (per_lift, per_drag) = (per_percent(&lift), per_percent(&drag));
+        (cost.per_percent_lift, cost.per_percent_drag) = (per_lift, per_drag);
         band(cost, &tolerance);
     }
     Ok(ErrorCosts { radii_m: rig.rotor.blade.station_radii_m().collect(), tolerance, costs })
@@ -102,6 +119,9 @@ fn empty(point: &FlightPoint, drawn: &Brief) -> Vec<Cost> {
         per_mm_thickness: Vec::new(),
         band_worst: 0.0,
         band_independent: 0.0,
+        per_percent_lift: None,
+        per_percent_drag: None,
+        band_polars: 0.0,
     };
     Figure::JUDGED.into_iter().filter(may).filter_map(known).map(cost).collect()
 }
@@ -137,6 +157,15 @@ fn changed(rig: &Rig, station: usize, off: Off, by: f64) -> Result<Rig, ShapeErr
     accepted(rig, propeller)
 }
 
+/// The blade with all coefficients of its polars times a factor.
+fn with_polars(rig: &Rig, lift: f64, drag: f64) -> Rig {
+    let mut other = rig.clone();
+    for family in &mut other.rotor.blade.families {
+        *family = Arc::new(family.scaled(lift, drag));
+    }
+    other
+}
+
 fn band(cost: &mut Cost, t: &Tolerance) {
     let of = |slopes: &[Option<f64>], by: f64| -> Vec<f64> {
         slopes.iter().flatten().map(|s| (s * by).abs()).collect()
@@ -148,5 +177,7 @@ fn band(cost: &mut Cost, t: &Tolerance) {
     ]
     .concat();
     cost.band_worst = parts.iter().sum();
+    let polars = [(cost.per_percent_lift, t.lift_percent), (cost.per_percent_drag, t.drag_percent)];
+    cost.band_polars = polars.iter().map(|(s, by)| (s.unwrap_or(0.0) * by).powi(2)).sum::<f64>().sqrt();
     cost.band_independent = parts.iter().map(|p| p * p).sum::<f64>().sqrt();
 }

@@ -21,7 +21,7 @@ pub use cost::error_costs;
 pub use error::ShapeError;
 pub use least_loss::{Lift, LossTask, least_loss};
 pub use search::{FREE, Listener, Progress, Wish, search, usual_aims};
-pub use twist::twist;
+pub use twist::{TwistBy, twist, twist_by};
 
 use crate::job::Job;
 

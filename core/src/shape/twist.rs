@@ -2,7 +2,9 @@
 //!
 //! At a condition with its own induced flow each station's balance is solved with lift and drag held at the best angle `α*` of its section at its Reynolds
 //! and Mach number, and `β = φ + α*`. The new blade meets the flight point's setting at another rpm, so blade and setting take turns until the angles rest.
-//! Along several flight points each station takes the angle of least `Σ w (α − α*)²`, which lies between its best angles. Near hub and tip, where Prandtl's
+//! Along several flight points each station takes the angle of least `Σ w (α − α*)²` or of least weighted loss of lift-to-drag, which lies between
+//! its best angles. A governor gives rpm and power both, which angles at their best cannot meet as well: there the twist is the one with which all
+//! stations depart alike, and that common departure is the governor's. Near hub and tip, where Prandtl's
 //! factor leaves little load, no angle carries the lift: there the geometric pitch of the nearest solved station is held, so that the blade can be carved.
 
 use super::brief::compared;
@@ -26,6 +28,16 @@ const NARROWINGS: u32 = 40;
 /// Widest part of the gap between two blades that one pass goes, rad.
 const WIDEST_STEP_RAD: f64 = 0.1;
 
+/// What is made least along several flight points.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
+pub enum TwistBy {
+    /// The weighted squares of the departures.
+    #[default]
+    Departure,
+    /// The weighted loss of lift-to-drag against its best.
+    Loss,
+}
+
 /// A flight point that counts.
 struct Counted {
     index: usize,
@@ -45,19 +57,29 @@ struct Counted {
 /// assert!(shaped.result.settled);
 /// ```
 pub fn twist(rig: &Rig, weights: &[f64]) -> Result<Shaped<Twist>, ShapeError> {
+    twist_by(rig, weights, TwistBy::Departure)
+}
+
+/// The same by what is made least.
+///
+/// # Errors
+/// As [`twist`].
+pub fn twist_by(rig: &Rig, weights: &[f64], by: TwistBy) -> Result<Shaped<Twist>, ShapeError> {
     let allowed = |w: &f64| w.is_finite() && *w >= 0.0;
     if !weights.iter().all(allowed) || !weights.iter().any(|w| *w > 0.0) {
         return Err(ShapeError::NoWeight);
     }
     let governed = matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. });
-    let most = if governed { 1 } else { MOST_PASSES };
     let (mut now, mut passes, mut settled) = (rig.clone(), 0, false);
     let mut origins = Vec::new();
-    while passes < most && !settled {
+    while passes < MOST_PASSES && !settled {
         passes += 1;
         let counted = counted(&now, weights).map_err(|e| if passes > 1 { with_new_angles(e) } else { e })?;
-        let wanted: Vec<Option<f64>> =
-            now.rotor.blade.station_radii_m().map(|r| solved(&now, r, &counted)).collect();
+        let wanted: Vec<Option<f64>> = if governed {
+            alike(&now, &counted)
+        } else {
+            now.rotor.blade.station_radii_m().map(|r| solved(&now, r, &counted, by)).collect()
+        };
         let (angles, from) = filled(&now, &wanted, &rig.job.flight_points[counted[0].index].name)?;
         let old: Vec<f64> =
             now.rotor.blade.station_radii_m().map(|r| now.rotor.blade.cut(r).angle_rad).collect();
@@ -66,7 +88,7 @@ pub fn twist(rig: &Rig, weights: &[f64]) -> Result<Shaped<Twist>, ShapeError> {
         let part = (WIDEST_STEP_RAD / gap).min(1.0);
         let next: Vec<f64> = old.iter().zip(&angles).map(|(a, b)| a + part * (b - a)).collect();
         settled = gap <= AT_REST_RAD;
-        now = accepted(&now, with_angles(&now, if governed { &angles } else { &next }))?;
+        now = accepted(&now, with_angles(&now, &next))?;
         origins = from;
     }
     let counted = counted(&now, weights).map_err(with_new_angles)?;
@@ -101,7 +123,7 @@ fn counted(rig: &Rig, weights: &[f64]) -> Result<Vec<Counted>, ShapeError> {
 }
 
 /// The drawn angle of least weighted departure at a radius, rad; `None` where no point that counts can be carried.
-fn solved(rig: &Rig, radius_m: f64, counted: &[Counted]) -> Option<f64> {
+fn solved(rig: &Rig, radius_m: f64, counted: &[Counted], by: TwistBy) -> Option<f64> {
     let ring = rig.rotor.ring(radius_m);
     let mut wanted: Vec<Wanted> = Vec::new();
     for c in counted {
@@ -115,34 +137,65 @@ fn solved(rig: &Rig, radius_m: f64, counted: &[Counted]) -> Option<f64> {
             element,
             turn_rad: c.at.turn_rad,
             best_rad: best.alpha_rad,
+            best_ratio: best.lift_to_drag,
             angle,
             weight: c.weight,
         });
     }
     let low = wanted.iter().map(|w| w.angle).reduce(f64::min)?;
     let high = wanted.iter().map(|w| w.angle).reduce(f64::max)?;
-    Some(if high - low < AT_REST_RAD { low } else { least(&wanted, low, high) })
+    Some(if high - low < AT_REST_RAD { low } else { least(&wanted, (low, high), by) })
+}
+
+/// The drawn angles with which, at the governed rpm, all stations depart alike from their best, weighted over the points that count; `None` where
+/// there is no balance to judge by.
+fn alike(rig: &Rig, counted: &[Counted]) -> Vec<Option<f64>> {
+    let blade = &rig.rotor.blade;
+    let departure = |radius_m: f64| {
+        let ring = rig.rotor.ring(radius_m);
+        let one = |c: &Counted| {
+            let element = rig.rotor.element(&ring, &c.at).0;
+            let (best, balance) = (best_of(&element)?, element.balance().filter(|b| b.loss > LEAST_FACTOR)?);
+            Some((c.weight, c.weight * (balance.alpha_rad - best.alpha_rad)))
+        };
+        let known: Option<Vec<(f64, f64)>> = counted.iter().map(one).collect();
+        let (weight, sum) = known?.into_iter().fold((0.0, 0.0), |(w, s), (a, b)| (w + a, s + b));
+        Some(sum / weight)
+    };
+    let departures: Vec<Option<f64>> = blade.station_radii_m().map(departure).collect();
+    let count = departures.iter().flatten().count().max(1) as f64;
+    let mean = departures.iter().flatten().sum::<f64>() / count;
+    let angle = |(r, d): (f64, &Option<f64>)| d.map(|d| blade.cut(r).angle_rad - (d - mean));
+    blade.station_radii_m().zip(&departures).map(angle).collect()
 }
 
 struct Wanted<'f> {
     element: Element<'f>,
     turn_rad: f64,
     best_rad: f64,
+    best_ratio: f64,
     angle: f64,
     weight: f64,
 }
 
 impl Wanted<'_> {
-    fn loss(&self, angle: f64) -> f64 {
+    fn loss(&self, angle: f64, by: TwistBy) -> f64 {
         let element = Element { angle_rad: angle + self.turn_rad, ..self.element };
-        element.balance().map_or(0.0, |b| self.weight * (b.alpha_rad - self.best_rad).powi(2))
+        let lost = |alpha_rad: f64| match by {
+            TwistBy::Departure => (alpha_rad - self.best_rad).powi(2),
+            TwistBy::Loss => {
+                let c = element.section.at(alpha_rad);
+                1.0 - c.cl / c.cd / self.best_ratio
+            }
+        };
+        element.balance().map_or(0.0, |b| self.weight * lost(b.alpha_rad))
     }
 }
 
-/// Least weighted square of the departures by golden section: each grows with the distance from its own angle.
-fn least(wanted: &[Wanted], mut low: f64, mut high: f64) -> f64 {
+/// Least weighted sum by golden section: each part grows with the distance from its own angle.
+fn least(wanted: &[Wanted], (mut low, mut high): (f64, f64), by: TwistBy) -> f64 {
     const G: f64 = 0.618_033_988_749_894_9;
-    let loss = |angle: f64| wanted.iter().map(|w| w.loss(angle)).sum::<f64>();
+    let loss = |angle: f64| wanted.iter().map(|w| w.loss(angle, by)).sum::<f64>();
     for _ in 0..NARROWINGS {
         let (a, b) = (high - G * (high - low), low + G * (high - low));
         if loss(a) <= loss(b) { high = b } else { low = a }

@@ -92,10 +92,14 @@ pub struct Cost {
     pub drawn: f64,
     /// Change per degree, per mm of chord and per mm of thickness, station by station.
     pub slopes: [Vec<Option<f64>>; 3],
-    /// Bands: independent errors, all to the worse side.
-    pub bands: [f64; 2],
+    /// Bands: independent errors of carving, all to the worse side, doubt of the polars.
+    pub bands: [f64; 3],
 }
 
+/// Doubt of the polars either way, percent of lift and of drag.
+pub const LIFT_PERCENT: f64 = 3.0;
+/// The same of drag.
+pub const DRAG_PERCENT: f64 = 10.0;
 /// How often a search tells where it is, in blades.
 const EVERY: u32 = 10;
 /// How far a chart goes either way of the drawn blade.
@@ -114,7 +118,7 @@ fn done(rig: &Rig, task: &Task, hear: impl FnMut(&Report)) -> Result<Report, Sha
     Ok(match task {
         Task::Twist(weights) => {
             let shaped = twist(rig, weights)?;
-            let settled = "A governor gives rpm and power both; angles alone cannot meet both, so it is near, not exact.";
+            let settled = "Blade and settings did not come to rest.";
             let said = if shaped.result.settled { Vec::new() } else { vec![settled.to_string()] };
             Report::Blade(Box::new(shaped.job.propeller), said)
         }
@@ -125,14 +129,15 @@ fn done(rig: &Rig, task: &Task, hear: impl FnMut(&Report)) -> Result<Report, Sha
         Task::Search => searched(rig, hear)?,
         Task::Chart(point, figure, steps) => charted(rig, *point, *figure, *steps)?,
         Task::Errors([angle_deg, chord_mm, thickness_mm]) => {
-            let tolerance =
-                Tolerance { angle_deg: *angle_deg, chord_mm: *chord_mm, thickness_mm: *thickness_mm };
+            let (lift_percent, drag_percent) = (LIFT_PERCENT, DRAG_PERCENT);
+            let (angle_deg, chord_mm, thickness_mm) = (*angle_deg, *chord_mm, *thickness_mm);
+            let tolerance = Tolerance { angle_deg, chord_mm, thickness_mm, lift_percent, drag_percent };
             let cost = |c: spokeshave::result::Cost| Cost {
                 flight_point: c.flight_point,
                 figure: c.figure,
                 drawn: c.drawn,
                 slopes: [c.per_degree, c.per_mm_chord, c.per_mm_thickness],
-                bands: [c.band_independent, c.band_worst],
+                bands: [c.band_independent, c.band_worst, c.band_polars],
             };
             Report::Errors(error_costs(rig, tolerance)?.costs.into_iter().map(cost).collect())
         }

@@ -6,7 +6,7 @@ use spokeshave::job::Job;
 use yew::prelude::*;
 
 use super::figures::{name, told, unit};
-use crate::background::shape::{Cost, Task};
+use crate::background::shape::{Cost, DRAG_PERCENT, LIFT_PERCENT, Task};
 use crate::chart::line::{Axis, LineChart, Series, Stroke, Upright};
 use crate::chart::unit::Unit;
 use crate::state::State;
@@ -34,7 +34,6 @@ const TOLERANCES: [([f64; 3], &str); 3] = [
 #[component]
 pub(super) fn Careful(props: &CarefulProps) -> Html {
     let tolerance = use_state_eq(|| 1);
-    let shown = use_state_eq(|| 0);
     let state = &props.state;
     let options: Vec<AttrValue> = TOLERANCES.iter().map(|(_, words)| AttrValue::from(*words)).collect();
     let onpick = {
@@ -54,7 +53,7 @@ pub(super) fn Careful(props: &CarefulProps) -> Html {
                 <button type="button" class="act" disabled={props.busy} {onclick}>{ "What they cost" }</button>
             </div>
             if let Some((_, costs)) = costs {
-                { drawings(state, costs, &shown) }
+                <CostDrawings state={state.clone()} costs={costs.clone()} />
             } else if props.costs.is_some() {
                 <p class="note">{ "The job has changed since this was worked out." }</p>
             }
@@ -62,8 +61,21 @@ pub(super) fn Careful(props: &CarefulProps) -> Html {
     }
 }
 
-fn drawings(state: &Seen, costs: &Rc<Vec<Cost>>, shown: &UseStateHandle<usize>) -> Html {
-    let Some(cost) = costs.get(**shown).or(costs.first()) else { return html! {} };
+/// Properties of [`CostDrawings`].
+#[derive(Properties, PartialEq)]
+pub struct CostDrawingsProps {
+    /// The state.
+    pub state: Seen,
+    /// What errors cost.
+    pub costs: Rc<Vec<Cost>>,
+}
+
+/// One figure along the blade, all of them in a table.
+#[component]
+pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
+    let shown = use_state_eq(|| 0usize);
+    let (state, costs) = (&props.state, &props.costs);
+    let Some(cost) = costs.get(*shown).or(costs.first()) else { return html! {} };
     let words = |c: &Cost| AttrValue::from(format!("{} at {}", name(c.figure), c.flight_point));
     let onpick = {
         let shown = shown.setter();
@@ -74,13 +86,13 @@ fn drawings(state: &Seen, costs: &Rc<Vec<Cost>>, shown: &UseStateHandle<usize>) 
         html! {
             <tr>
                 <th scope="row">{ words(c) }</th><td>{ told(state.units, c.figure, Some(c.drawn)) }</td>
-                <td>{ band(c.bands[0]) }</td><td>{ band(c.bands[1]) }</td>
+                { for c.bands.iter().map(|b| html! { <td>{ band(*b) }</td> }) }
             </tr>
         }
     });
     html! {
         <>
-            <Pick label="Shown along the blade" options={costs.iter().map(words).collect::<Vec<_>>()} picked={Some((**shown).min(costs.len() - 1))} {onpick} />
+            <Pick label="Shown along the blade" options={costs.iter().map(words).collect::<Vec<_>>()} picked={Some((*shown).min(costs.len() - 1))} {onpick} />
             <p class="note">{ careful_words(state, cost) }</p>
             <div class="trio">{ for (0..3).map(|k| along(state, cost, k)) }</div>
             <div class="scroll" tabindex="0" role="region" aria-label="What errors of carving come to">
@@ -90,6 +102,7 @@ fn drawings(state: &Seen, costs: &Rc<Vec<Cost>>, shown: &UseStateHandle<usize>) 
                         <th scope="col">{ "Figure" }</th><th scope="col">{ "As drawn" }</th>
                         <th scope="col">{ "Errors apart" }<small>{ "root of squares" }</small></th>
                         <th scope="col">{ "All to the worse" }</th>
+                        <th scope="col">{ "Polars in doubt" }<small>{ format!("lift ±{LIFT_PERCENT} %, drag ±{DRAG_PERCENT} %") }</small></th>
                     </tr></thead>
                     <tbody>{ for rows }</tbody>
                 </table>

@@ -70,15 +70,20 @@ fn point_name(state: &Seen) -> String {
     state.job().flight_points.get(state.point).map_or_else(String::new, |p| p.name.clone())
 }
 
+/// Properties of [`Drawing`].
 #[derive(Properties, PartialEq)]
-struct DrawingProps {
-    chart: Rc<Chart>,
-    rig: RigRef,
-    units: Units,
+pub struct DrawingProps {
+    /// The chart.
+    pub chart: Rc<Chart>,
+    /// The drawn blade.
+    pub rig: RigRef,
+    /// Units shown.
+    pub units: Units,
 }
 
+/// The chart, as wide as its place, with its table.
 #[component]
-fn Drawing(props: &DrawingProps) -> Html {
+pub fn Drawing(props: &DrawingProps) -> Html {
     let (node, width) = use_width(560.0);
     let (chart, units) = (&props.chart, props.units);
     let at = Place::new(chart, width);

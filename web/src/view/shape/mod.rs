@@ -23,6 +23,9 @@ use variants::Blades;
 use wishes::WishBoxes;
 use work::{Run, Work, use_work};
 
+pub use careful::CostDrawings;
+pub use chart::Drawing as ChartDrawing;
+
 /// Properties of [`ShapePanel`].
 #[derive(Properties, PartialEq)]
 pub struct ShapePanelProps {

@@ -19,14 +19,25 @@ pub(crate) struct Args {
     /// Tolerance of the thickness, mm either way
     #[arg(long, default_value_t = 0.3)]
     thickness_mm: f64,
+    /// Doubt of the polars' lift coefficients, percent either way
+    #[arg(long, default_value_t = 3.0)]
+    lift_percent: f64,
+    /// Doubt of the polars' drag coefficients, percent either way
+    #[arg(long, default_value_t = 10.0)]
+    drag_percent: f64,
     /// One JSON document, SI units
     #[arg(long)]
     json: bool,
 }
 
 pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
-    let tolerance =
-        Tolerance { angle_deg: args.angle_deg, chord_mm: args.chord_mm, thickness_mm: args.thickness_mm };
+    let tolerance = Tolerance {
+        angle_deg: args.angle_deg,
+        chord_mm: args.chord_mm,
+        thickness_mm: args.thickness_mm,
+        lift_percent: args.lift_percent,
+        drag_percent: args.drag_percent,
+    };
     match shape::error_costs(rig, tolerance) {
         Ok(costs) if args.json => print_json(&costs)?,
         Ok(costs) => print(&text(&costs))?,
@@ -39,14 +50,17 @@ fn text(e: &ErrorCosts) -> String {
     let radii: Vec<String> = e.radii_m.iter().map(|r| figure(Some(1e3 * r), 0)).collect();
     let mut header = vec!["per degree at r mm", "figure", "drawn"];
     header.extend(radii.iter().map(String::as_str));
-    header.extend(["independent ±", "worst ±"]);
+    header.extend(["independent ±", "worst ±", "polars ±"]);
     let t = &e.tolerance;
     format!(
-        "What an error of the blade angle costs, and the band of ±{}°, ±{} mm chord, ±{} mm thickness\n\
+        "What an error of the blade angle costs, and the band of ±{}°, ±{} mm chord, ±{} mm thickness,\n\
+         and of polars with ±{} % of lift, ±{} % of drag\n\
          (linear; chord and thickness by station in the JSON)\n\n{}",
         t.angle_deg,
         t.chord_mm,
         t.thickness_mm,
+        t.lift_percent,
+        t.drag_percent,
         table(&header, e.costs.iter().map(row).collect())
     )
 }
@@ -59,6 +73,6 @@ fn row(c: &Cost) -> Vec<String> {
     };
     let mut row = vec![c.flight_point.clone(), word(&c.figure), figure(Some(c.drawn), digits)];
     row.extend(c.per_degree.iter().map(|s| signed(*s, digits)));
-    row.extend([c.band_independent, c.band_worst].map(|b| figure(Some(b), digits)));
+    row.extend([c.band_independent, c.band_worst, c.band_polars].map(|b| figure(Some(b), digits)));
     row
 }

@@ -35,6 +35,12 @@ pub(crate) struct Args {
     /// Greatest chord, mm
     #[arg(long, value_name = "MM")]
     greatest_chord_mm: Option<f64>,
+    /// Each station by itself, its lift not smoothed along the blade
+    #[arg(long)]
+    by_station: bool,
+    /// No station more near the tip
+    #[arg(long)]
+    stations_as_drawn: bool,
     #[command(flatten)]
     print: Print,
 }
@@ -48,6 +54,8 @@ pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
         lift: args.cl.map_or(own, Lift::Coefficient),
         least_chord_m: args.least_chord_mm.map(|c| 1e-3 * c),
         greatest_chord_m: args.greatest_chord_mm.map(|c| 1e-3 * c),
+        by_station: args.by_station,
+        stations_as_drawn: args.stations_as_drawn,
     };
     told(shape::least_loss(rig, &task), &args.print, "least induced loss", text)
 }

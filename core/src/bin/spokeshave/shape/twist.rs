@@ -2,7 +2,7 @@
 
 use spokeshave::result::{Origin, Twist, TwistStation};
 use spokeshave::rig::Rig;
-use spokeshave::shape;
+use spokeshave::shape::{self, TwistBy};
 
 use super::{Print, compared, told};
 use crate::input::{Outcome, Stop, point_index};
@@ -13,13 +13,17 @@ pub(crate) struct Args {
     /// A flight point that counts, with its weight where several do; the first of the job without it
     #[arg(long, value_name = "NAME[=WEIGHT]")]
     point: Vec<String>,
+    /// Along several flight points, make the weighted loss of lift-to-drag least rather than the weighted squares of the departures
+    #[arg(long)]
+    by_loss: bool,
     #[command(flatten)]
     print: Print,
 }
 
 pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
     let weights = weights(rig, &args.point)?;
-    told(shape::twist(rig, &weights), &args.print, "best-incidence twist", text)
+    let by = if args.by_loss { TwistBy::Loss } else { TwistBy::Departure };
+    told(shape::twist_by(rig, &weights, by), &args.print, "best-incidence twist", text)
 }
 
 /// One weight a flight point of the job.
@@ -52,11 +56,8 @@ fn text(t: &Twist) -> String {
     let mut header = vec!["r mm", "r/R", "drawn °", "new °", "on the face °"];
     header.extend(t.weights.iter().map(|(name, _)| name.as_str()));
     header.push("");
-    let settled = if t.settled {
-        "Blade and settings agree."
-    } else {
-        "Blade and settings do not agree: a governor gives rpm and power, so that angles alone cannot meet both."
-    };
+    let settled =
+        if t.settled { "Blade and settings agree." } else { "Blade and settings did not come to rest." };
     let rows = t.stations.iter().map(row).collect();
     format!(
         "Best-incidence twist for {}\n{settled}\n\n{}\n\n{}",

@@ -3,20 +3,28 @@
 //! Circulation times blades is given by the method; how a station carries it is a choice ([`Lift`]). At low Reynolds numbers the best incidence of a station
 //! asks for more lift and so for less chord, which lowers its Reynolds number and calls for still more lift: there the chord of least drag for the lift it
 //! carries, its Reynolds number going with it, is the better choice. Chord and sections take turns with the flow until they rest. Where the chord meets its least or greatest, the circulation is kept and the lift coefficient follows, up to 90 % of the
-//! section's greatest lift. Stations, sections and thickness ratios are those of the drawn blade.
+//! section's greatest lift.
+//!
+//! The chord of least drag jumps between stations where a section has two tops of lift-to-drag; so that it can be carved, the lift coefficients found are
+//! smoothed along the blade by a cubic, weighted by the load, and the chords follow from them. Stations, sections and thickness ratios are those of the
+//! drawn blade; where its last station lies well inboard of the tip, whose chord would be held to the end, one more near the tip gives the tip its shape.
+
+mod smooth;
+mod working;
 
 use super::adkins_liebeck::{Design, Task, Wanted, design};
 use super::brief::compared;
 use super::variant::{accepted, rounded, with_angles};
 use super::{ShapeError, Shaped};
 use crate::curve::Curve;
+use crate::drawn::with_station;
 use crate::fit;
 use crate::job::{Propeller, Setting};
-use crate::report::best_of;
-use crate::result::{Bound, LeastLoss, LossStation, State};
+use crate::result::{LeastLoss, LossStation, State};
 use crate::rig::{Rig, air_of, rotation_rad_s};
 use crate::rotor::Condition;
-use crate::rotor::element::{Blend, Element};
+use smooth::smoothed;
+use working::{Limits, Working, works};
 
 /// How a station carries its share of the lift.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
@@ -45,38 +53,22 @@ pub struct LossTask {
     pub least_chord_m: Option<f64>,
     /// Greatest chord, m; a quarter of the diameter where not given.
     pub greatest_chord_m: Option<f64>,
+    /// Each station by itself: lift coefficients are not smoothed along the blade.
+    pub by_station: bool,
+    /// The stations of the drawn blade and no other near the tip.
+    pub stations_as_drawn: bool,
 }
 
-/// Share of the greatest lift that a station may be asked for.
-const STALL_SHARE: f64 = 0.9;
-/// Lift coefficient below which drag over lift tells nothing.
-const LEAST_LIFT: f64 = 0.05;
-/// Steps of a look over the chord, from the least to the greatest in equal ratios.
-const CHORDS: u32 = 24;
-const NARROWINGS: u32 = 16;
-const GOLDEN: f64 = 0.618_033_988_749_894_9;
+/// Where a station is added near the tip, and from where on one is near enough, as shares of the tip radius.
+const TIP_STATION: f64 = 0.98;
+const NEAR_TIP: f64 = 0.97;
+/// Degree of the polynomial through the lift coefficients.
+const DEGREE: u32 = 3;
 const MOST_PASSES: u32 = 60;
 /// Passes after which steps grow smaller.
 const WHOLE_STEPS: u32 = 10;
 /// Chords rest when none changes by more, as a share of the radius.
 const AT_REST: f64 = 1e-7;
-
-/// How a station works.
-#[derive(Clone, Copy)]
-struct Working {
-    chord_m: f64,
-    cl: f64,
-    drag_to_lift: f64,
-    alpha_rad: f64,
-    reynolds: f64,
-    bound: Bound,
-}
-
-struct Limits {
-    least_m: f64,
-    greatest_m: f64,
-    lift: Lift,
-}
 
 /// The blade of least induced loss.
 ///
@@ -86,8 +78,14 @@ pub fn least_loss(rig: &Rig, asked: &LossTask) -> Result<Shaped<LeastLoss>, Shap
     let at = condition(rig, asked)?;
     let task = task(rig, asked, &at)?;
     let limits = limits(rig, asked)?;
-    let (design, working) = rested(rig, task, &at, &limits)?;
+    let (drawn, with_tip) = (rig, with_tip(rig).filter(|_| !asked.stations_as_drawn));
+    let rig = with_tip.as_ref().unwrap_or(rig);
+    let (mut design, mut working) = rested(rig, task, &at, &limits, None)?;
     let radii: Vec<f64> = rig.rotor.blade.station_radii_m().collect();
+    if limits.lift == Lift::LeastDrag && !asked.by_station {
+        let lifts = smooth_lifts(&task, &design, &radii, &working);
+        (design, working) = rested(rig, task, &at, &limits, Some(&lifts))?;
+    }
     let angle = |(r, w): (&f64, &Working)| {
         design.flow(fraction(&task, *r), w.drag_to_lift).inflow_rad + w.alpha_rad - at.turn_rad
     };
@@ -105,9 +103,29 @@ pub fn least_loss(rig: &Rig, asked: &LossTask) -> Result<Shaped<LeastLoss>, Shap
         analysed_thrust_n: loads.thrust_n,
         analysed_power_w: loads.torque_n_m * at.rotation_rad_s,
         stations: radii.iter().zip(&working).map(|(r, w)| station(&shaped, &design, *r, w)).collect(),
-        flight_points: compared(rig, &shaped),
+        flight_points: compared(drawn, &shaped),
     };
     Ok(Shaped { job: shaped.job, result })
+}
+
+/// The blade with a station near the tip; `None` where it has one.
+fn with_tip(rig: &Rig) -> Option<Rig> {
+    let last = rig.job.propeller.stations.last()?.radius_fraction;
+    let job = (last < NEAR_TIP).then(|| with_station(&rig.job, TIP_STATION)).flatten()?;
+    rig.with_propeller(job.propeller).ok()
+}
+
+/// The lift coefficients of the stations in a smooth run along the blade, within those found.
+fn smooth_lifts(task: &Task, design: &Design, radii: &[f64], working: &[Working]) -> Vec<f64> {
+    let x: Vec<f64> = radii.iter().map(|r| r / task.radius_m).collect();
+    let cl: Vec<f64> = working.iter().map(|w| w.cl).collect();
+    let load = |(r, w): (&f64, &Working)| {
+        let flow = design.flow(fraction(task, *r), w.drag_to_lift);
+        flow.chord_lift_m * flow.speed_m_s.powi(2)
+    };
+    let weight: Vec<f64> = radii.iter().zip(working).map(load).map(|w| w.max(0.0)).collect();
+    let (low, high) = cl.iter().fold((f64::INFINITY, 0.0f64), |(l, h), c| (l.min(*c), h.max(*c)));
+    smoothed(&x, &cl, &weight, DEGREE).into_iter().map(|c| c.clamp(low, high)).collect()
 }
 
 /// Speed, rpm and air to design for.
@@ -189,21 +207,24 @@ fn rested(
     task: Task,
     at: &Condition,
     limits: &Limits,
+    lifts: Option<&[f64]>,
 ) -> Result<(Design, Vec<Working>), ShapeError> {
+    let lift = |i: usize| lifts.and_then(|all| all.get(i).copied());
     let blade = &rig.rotor.blade;
     let radii: Vec<f64> = blade.station_radii_m().collect();
     let fractions: Vec<f64> = radii.iter().map(|r| r / task.radius_m).collect();
     let mut chords: Vec<f64> = radii.iter().map(|&r| blade.cut(r).chord_m).collect();
-    let first = radii.iter().zip(&chords).map(|(&r, &c)| works(rig, at, r, (c, None), limits));
+    let first = radii.iter().zip(&chords).enumerate();
+    let first = first.map(|(i, (&r, &c))| works(rig, at, r, (c, None), limits, lift(i)));
     let mut working: Vec<Working> = first.collect::<Result<_, _>>()?;
     let mut pass = 0;
     loop {
         let ratio = working.iter().map(|w| w.drag_to_lift).collect();
         let along = Curve::new(fractions.clone(), ratio).ok_or(ShapeError::NotConverged)?;
         let found = design(task, |xi| along.at(xi))?;
-        for ((&r, w), &chord) in radii.iter().zip(&mut working).zip(&chords) {
+        for (i, ((&r, w), &chord)) in radii.iter().zip(&mut working).zip(&chords).enumerate() {
             let flow = found.flow(fraction(&task, r), w.drag_to_lift);
-            *w = works(rig, at, r, (chord, Some(flow.chord_lift_m)), limits)?;
+            *w = works(rig, at, r, (chord, Some(flow.chord_lift_m)), limits, lift(i))?;
         }
         let step = 1.0 / f64::from(u32::max(1, pass.max(WHOLE_STEPS) - WHOLE_STEPS));
         let mut change: f64 = 0.0;
@@ -216,102 +237,6 @@ fn rested(
             return Ok((found, working));
         }
     }
-}
-
-/// How a station works whose chord times lift coefficient (m) is given, its Reynolds number by the chord of the pass before.
-fn works(
-    rig: &Rig,
-    at: &Condition,
-    radius_m: f64,
-    (chord_m, chord_lift_m): (f64, Option<f64>),
-    limits: &Limits,
-) -> Result<Working, ShapeError> {
-    let free = chord_lift_m.filter(|_| limits.lift == Lift::LeastDrag);
-    if let Some(found) = free.and_then(|kept| least_drag(rig, at, radius_m, kept, limits)) {
-        return Ok(found);
-    }
-    let mut ring = rig.rotor.ring(radius_m);
-    ring.cut.chord_m = chord_m;
-    let (element, situation) = rig.rotor.element(&ring, at);
-    let no_lift = ShapeError::NoLift { radius_m };
-    let alpha_rad = match limits.lift {
-        Lift::Coefficient(cl) => incidence(&element.section, cl),
-        Lift::LeastDrag | Lift::BestIncidence => best_of(&element).map(|b| b.alpha_rad),
-    };
-    let alpha_rad = alpha_rad.ok_or(no_lift)?;
-    let c = element.section.at(alpha_rad);
-    let (free, reynolds) = (chord_lift_m.map_or(chord_m, |cc| cc / c.cl), situation.reynolds);
-    let chord = free.clamp(limits.least_m, limits.greatest_m);
-    let unbound = Working {
-        chord_m: chord,
-        cl: c.cl,
-        drag_to_lift: c.cd / c.cl,
-        alpha_rad,
-        reynolds,
-        bound: Bound::Free,
-    };
-    let Some(kept) = chord_lift_m.filter(|_| chord != free) else { return Ok(unbound) };
-    Ok(bounded(&element, unbound, kept / chord, chord < free))
-}
-
-/// The chord of least drag for a chord times lift coefficient (m); `None` where no chord within the limits carries it.
-fn least_drag(rig: &Rig, at: &Condition, radius_m: f64, kept_m: f64, limits: &Limits) -> Option<Working> {
-    let with = |place: f64| -> Option<Working> {
-        let mut ring = rig.rotor.ring(radius_m);
-        let chord_m = limits.least_m * (limits.greatest_m / limits.least_m).powf(place);
-        ring.cut.chord_m = chord_m;
-        let (element, situation) = rig.rotor.element(&ring, at);
-        let cl = kept_m / chord_m;
-        let most = STALL_SHARE * element.section.at(element.section.stall_rad()).cl;
-        let alpha_rad = incidence(&element.section, cl).filter(|_| cl <= most && cl >= LEAST_LIFT)?;
-        let (c, reynolds) = (element.section.at(alpha_rad), situation.reynolds);
-        Some(Working { chord_m, cl, drag_to_lift: c.cd / cl, alpha_rad, reynolds, bound: Bound::Free })
-    };
-    let drag = |w: &Option<Working>| w.map_or(f64::INFINITY, |w| w.drag_to_lift);
-    let node = |i: u32| f64::from(i) / f64::from(CHORDS);
-    let by_drag = |a: &u32, b: &u32| drag(&with(node(*a))).total_cmp(&drag(&with(node(*b))));
-    let top = (0..=CHORDS).min_by(by_drag).filter(|i| with(node(*i)).is_some())?;
-    let (mut low, mut high) = (node(top.saturating_sub(1)), node((top + 1).min(CHORDS)));
-    for _ in 0..NARROWINGS {
-        let (a, b) = (high - GOLDEN * (high - low), low + GOLDEN * (high - low));
-        if drag(&with(a)) <= drag(&with(b)) { high = b } else { low = a }
-    }
-    let bound = match 0.5 * (low + high) {
-        place if place < 1e-3 => Bound::LeastChord,
-        place if place > 1.0 - 1e-3 => Bound::GreatestChord,
-        _ => Bound::Free,
-    };
-    with(0.5 * (low + high)).or_else(|| with(node(top))).map(|w| Working { bound, ..w })
-}
-
-/// A station whose chord is bound: the lift coefficient that keeps its circulation.
-fn bounded(element: &Element, unbound: Working, cl: f64, narrow: bool) -> Working {
-    let stall_rad = element.section.stall_rad();
-    let most = STALL_SHARE * element.section.at(stall_rad).cl;
-    let bound = match narrow {
-        true if cl > most => Bound::NearStall,
-        true => Bound::GreatestChord,
-        false => Bound::LeastChord,
-    };
-    let Some(alpha_rad) = incidence(&element.section, cl.min(most)) else {
-        return Working { bound, ..unbound };
-    };
-    let c = element.section.at(alpha_rad);
-    // Near zero lift the drag over lift has no bound; what counts is that little circulation is lost there.
-    Working { cl: c.cl, drag_to_lift: (c.cd / c.cl.max(0.05)).min(1.0), alpha_rad, bound, ..unbound }
-}
-
-/// The angle below stall at which a section gives a lift coefficient, rad.
-fn incidence(section: &Blend, cl: f64) -> Option<f64> {
-    let (mut low, mut high) = (section.negative_stall_rad(), section.stall_rad());
-    if !(section.at(low).cl < cl && section.at(high).cl >= cl) {
-        return None;
-    }
-    for _ in 0..60 {
-        let middle = 0.5 * (low + high);
-        if section.at(middle).cl < cl { low = middle } else { high = middle }
-    }
-    Some(0.5 * (low + high))
 }
 
 fn with_chords(mut propeller: Propeller, working: &[Working]) -> Propeller {
