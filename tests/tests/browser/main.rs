@@ -7,3 +7,4 @@ mod machine;
 mod native_save;
 mod opening;
 mod rescue;
+mod shape;
