@@ -12,6 +12,7 @@ mod cautions;
 mod hub;
 mod judged;
 mod loads;
+mod margin;
 mod mass;
 mod material;
 mod moisture;
@@ -26,6 +27,7 @@ mod vibration;
 
 pub use blade::{BladeBeam, WoodError};
 pub use cautions::CAUTIONS;
+pub use margin::least_margin;
 pub use mass::mass;
 pub use material::{Material, Strength, material};
 pub use moisture::at_moisture;

@@ -206,6 +206,7 @@ fn wrong_wishes_are_named_by_their_path() {
         ("/wishes", json!({"held": ["hope"]}), "wishes.held[0]: unknown variant"),
         ("/wishes", json!({"limits": {"tip_mach_most": 0}}), "wishes.limits.tip_mach_most: 0"),
         ("/wishes", json!({"limits": {"rpm_most": -1}}), "wishes.limits.rpm_most: -1"),
+        ("/wishes", json!({"limits": {"stress_margin_least": -1}}), "wishes.limits.stress_margin_least: -1"),
         ("/wishes", json!({"limits": {"diameter_most_m": 0}}), "wishes.limits.diameter_most_m: 0"),
         ("/wishes", json!({"limits": {"ground_clearance_m": 0.2}}), "wishes.limits.ground_clearance_m: 0.2"),
         (

@@ -6,6 +6,7 @@ use spokeshave::job::{Aim, DEMOS, Figure, Held, Job, Limits, RpmLimit, Wishes};
 use spokeshave::result::{Limit, Search, Stopped};
 use spokeshave::rig::Rig;
 use spokeshave::shape::{FREE, ShapeError, Shaped, Wish, brief, search};
+use spokeshave::wood::least_margin;
 
 fn demo(index: usize) -> Rig {
     Rig::new(&Job::from_json(DEMOS[index].json).unwrap()).unwrap()
@@ -83,6 +84,26 @@ fn limits_are_kept_and_cost_something() {
     }
     let cruise = bound.result.flight_points[2].shaped.rpm.unwrap();
     assert!(cruise <= 2500.1, "{cruise}");
+}
+
+/// A margin above that of the drawn blade is reached by another blade; without wood in the job nothing is judged.
+#[test]
+fn a_stress_margin_is_kept_where_the_job_names_its_wood() {
+    let mut job = demo(0).job;
+    let limits = |least| Limits { stress_margin_least: Some(least), ..Limits::default() };
+    let bare = Rig::new(&job).unwrap();
+    let few = Wish { most_trials: 60, ..Wish::of(&bare) };
+    let result = found(&bare, &Wish { limits: limits(99.0), ..few.clone() }).unwrap().result;
+    assert!(result.margins.iter().all(|m| m.limit != Limit::StressMarginLeast));
+    job.wood = Some(spokeshave::job::Wood::default());
+    let rig = Rig::new(&job).unwrap();
+    let (_, drawn) = least_margin(&rig).unwrap().unwrap();
+    let wish = Wish { limits: limits(drawn + 0.05), most_trials: 150, ..few };
+    let shaped = found(&rig, &wish).unwrap();
+    let (_, kept) = least_margin(&Rig::new(&shaped.job).unwrap()).unwrap().unwrap();
+    assert!(kept >= drawn + 0.05 - 1e-4, "{kept} {drawn}");
+    let message = found(&rig, &Wish { limits: limits(90.0), ..wish }).unwrap_err().to_string();
+    assert!(message.contains("stress margin") && message.contains("past the limit"), "{message}");
 }
 
 #[test]

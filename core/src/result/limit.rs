@@ -26,6 +26,8 @@ pub enum Limit {
     BlankWidthMost,
     /// Greatest depth of the blank, m.
     BlankDepthMost,
+    /// Least stress margin, limit over stress less 1.
+    StressMarginLeast,
 }
 
 /// How far a limit is kept.
@@ -58,6 +60,7 @@ impl Limit {
             Self::DiameterMost => "diameter",
             Self::BlankWidthMost => "width of the blank",
             Self::BlankDepthMost => "thickness of the blank",
+            Self::StressMarginLeast => "stress margin",
         }
     }
 
@@ -68,6 +71,7 @@ impl Limit {
             Self::DiameterMost | Self::BlankWidthMost | Self::BlankDepthMost => {
                 format!("{:.1} mm", 1e3 * value)
             }
+            Self::StressMarginLeast => format!("{value:.3}"),
             Self::EnginePower => format!("{:.3} kW", 1e-3 * value),
             _ => format!("{value:.0} rpm"),
         }

@@ -4,6 +4,7 @@ use super::brief::Look;
 use crate::job::{FlightPoint, Limits, Setting};
 use crate::result::{Brief, Limit, Margin};
 use crate::rig::Rig;
+use crate::wood::least_margin;
 
 /// The flight point of the standing limit: the air of the first flight point, at rest, full throttle.
 pub(super) fn standing(rig: &Rig, limits: &Limits) -> Option<FlightPoint> {
@@ -34,7 +35,17 @@ pub(super) fn margins(
     all.extend(
         blade.into_iter().filter_map(|(limit, found, most)| Some(at_most(limit, None, Some(found), most?))),
     );
+    all.extend(stress(rig, limits));
     all
+}
+
+/// The stress margin, where a limit asks for it and the job names its wood; its share is that of the stress.
+fn stress(rig: &Rig, limits: &Limits) -> Option<Margin> {
+    let least = limits.stress_margin_least.filter(|_| rig.job.wood.is_some())?;
+    let found = least_margin(rig).ok().flatten();
+    let share = found.as_ref().map_or(-1.0, |(_, margin)| (1.0 + margin) / (1.0 + least) - 1.0);
+    let (flight_point, found) = found.unzip();
+    Some(Margin { limit: Limit::StressMarginLeast, flight_point, found, allowed: Some(least), share })
 }
 
 /// Limits that a flight point has by itself.

@@ -23,11 +23,13 @@ pub enum LimitFigure {
     BlankWidth,
     /// Thickness of the blank.
     BlankDepth,
+    /// Least stress margin.
+    StressMargin,
 }
 
 impl LimitFigure {
     /// All of them, in the order shown.
-    pub const ALL: [Self; 8] = [
+    pub const ALL: [Self; 9] = [
         Self::StandingRpm,
         Self::Rpm,
         Self::TipMach,
@@ -36,6 +38,7 @@ impl LimitFigure {
         Self::Clearance,
         Self::BlankWidth,
         Self::BlankDepth,
+        Self::StressMargin,
     ];
 
     /// What it is called, its name in the job file, what it measures.
@@ -49,6 +52,7 @@ impl LimitFigure {
             Self::Clearance => ("ground clearance", "ground_clearance_m", Quantity::Length),
             Self::BlankWidth => ("width of the blank", "blank_width_most_m", Quantity::Length),
             Self::BlankDepth => ("thickness of the blank", "blank_depth_most_m", Quantity::Length),
+            Self::StressMargin => ("least stress margin", "stress_margin_least", Quantity::Coefficient),
         }
     }
 
@@ -79,6 +83,7 @@ impl LimitFigure {
             Self::Clearance => &mut limits.ground_clearance_m,
             Self::BlankWidth => &mut limits.blank_width_most_m,
             Self::BlankDepth => &mut limits.blank_depth_most_m,
+            Self::StressMargin => &mut limits.stress_margin_least,
         }
     }
 

@@ -32,6 +32,7 @@ fn check_limits(found: &mut Found, limits: &Limits, points: &[FlightPoint]) {
     found.optional(at("shaft_height_m"), limits.shaft_height_m, 0.01..=20.0, "m");
     found.optional(at("blank_width_most_m"), limits.blank_width_most_m, 0.001..=12.0, "m");
     found.optional(at("blank_depth_most_m"), limits.blank_depth_most_m, 0.001..=12.0, "m");
+    found.optional(at("stress_margin_least"), limits.stress_margin_least, 0.0..=100.0, "");
     check_clearance(found, limits);
     found.count(&at("rpm"), limits.rpm.len(), 0..=points.len());
     for (i, limit) in limits.rpm.iter().enumerate() {

@@ -37,6 +37,9 @@ pub(super) struct LimitArgs {
     /// Thickness of the blank, mm
     #[arg(long, value_name = "MM")]
     blank_thickness_mm: Option<f64>,
+    /// Least stress margin, limit over stress less 1; needs a job that names its wood
+    #[arg(long, value_name = "MARGIN")]
+    stress_margin_least: Option<f64>,
 }
 
 /// `POINT=LEAST..MOST`.
@@ -73,6 +76,7 @@ impl LimitArgs {
             ground_clearance_m: mm(self.ground_clearance_mm, own.ground_clearance_m),
             blank_width_most_m: mm(self.blank_width_mm, own.blank_width_most_m),
             blank_depth_most_m: mm(self.blank_thickness_mm, own.blank_depth_most_m),
+            stress_margin_least: self.stress_margin_least.or(own.stress_margin_least),
             rpm: own.rpm,
         };
         for RpmSpan(span) in &self.rpm {
