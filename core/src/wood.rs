@@ -27,7 +27,7 @@ mod vibration;
 
 pub use blade::{BladeBeam, WoodError};
 pub use cautions::CAUTIONS;
-pub use margin::least_margin;
+pub use margin::{least_margin, least_margin_like};
 pub use mass::mass;
 pub use material::{Material, Strength, material};
 pub use moisture::at_moisture;

@@ -4,7 +4,7 @@ use ndarray::Array2;
 
 use super::ShapeError;
 use super::brief::look;
-use super::limits::{margins, standing};
+use super::limits::{beam, margins, standing};
 use super::variant::{accepted, with_angles_of};
 use crate::fit::Near;
 use crate::job::Limits;
@@ -42,13 +42,13 @@ pub fn pitch_diameter(
             return Err(ShapeError::Figure { name, found: steps as f64, allowed: "1 to 200" });
         }
     }
-    let standing = standing(rig, limits);
+    let (standing, beam) = (standing(rig, limits), beam(rig, limits));
     let (mut near, mut near_standing) = (Near::default(), Near::default());
     let mut cell = |(p, d): (usize, usize)| {
         let rig = sized(rig, pitches_m[p], diameters_m[d], by).ok()?;
         let looked = look(&rig, at, &mut near);
         let standing = standing.as_ref().map(|point| look(&rig, point, &mut near_standing).brief);
-        let all = margins(&rig, limits, std::slice::from_ref(&looked), standing.as_ref());
+        let all = margins(&rig, limits, std::slice::from_ref(&looked), standing.as_ref(), beam.as_ref());
         let broken = all.iter().filter(|m| m.share < 0.0).map(|m| m.limit).collect();
         Some(ChartCell { figures: looked.brief, standing_rpm: standing.and_then(|b| b.rpm), broken })
     };

@@ -4,7 +4,7 @@ use super::brief::Look;
 use crate::job::{FlightPoint, Limits, Setting};
 use crate::result::{Brief, Limit, Margin};
 use crate::rig::Rig;
-use crate::wood::least_margin;
+use crate::wood::{BladeBeam, least_margin_like};
 
 /// The flight point of the standing limit: the air of the first flight point, at rest, full throttle.
 pub(super) fn standing(rig: &Rig, limits: &Limits) -> Option<FlightPoint> {
@@ -14,6 +14,12 @@ pub(super) fn standing(rig: &Rig, limits: &Limits) -> Option<FlightPoint> {
     Some(FlightPoint { name, airspeed_m_s: Some(0.0), setting: Setting::FullThrottle {}, ..first })
 }
 
+/// The drawn blade as a beam, where a limit asks for its stress and the job names its wood.
+pub(super) fn beam(rig: &Rig, limits: &Limits) -> Option<BladeBeam> {
+    limits.stress_margin_least.filter(|_| rig.job.wood.is_some())?;
+    BladeBeam::new(rig).ok()
+}
+
 /// Margins of a propeller with its figures at the flight points looked at; `standing` where that limit is set. How many there
 /// are depends on the job and its limits alone.
 pub(super) fn margins(
@@ -21,6 +27,7 @@ pub(super) fn margins(
     limits: &Limits,
     looked_at: &[Look],
     standing: Option<&Brief>,
+    beam: Option<&BladeBeam>,
 ) -> Vec<Margin> {
     let mut all: Vec<Margin> = looked_at.iter().flat_map(|look| at_point(limits, look)).collect();
     if let (Some(least), Some(b)) = (limits.standing_rpm_least, standing) {
@@ -35,14 +42,14 @@ pub(super) fn margins(
     all.extend(
         blade.into_iter().filter_map(|(limit, found, most)| Some(at_most(limit, None, Some(found), most?))),
     );
-    all.extend(stress(rig, limits));
+    all.extend(beam.and_then(|beam| stress(rig, limits, beam)));
     all
 }
 
-/// The stress margin, where a limit asks for it and the job names its wood; its share is that of the stress.
-fn stress(rig: &Rig, limits: &Limits) -> Option<Margin> {
-    let least = limits.stress_margin_least.filter(|_| rig.job.wood.is_some())?;
-    let found = least_margin(rig).ok().flatten();
+/// The stress margin; its share is that of the stress.
+fn stress(rig: &Rig, limits: &Limits, drawn: &BladeBeam) -> Option<Margin> {
+    let least = limits.stress_margin_least?;
+    let found = least_margin_like(drawn, rig).ok().flatten();
     let share = found.as_ref().map_or(-1.0, |(_, margin)| (1.0 + margin) / (1.0 + least) - 1.0);
     let (flight_point, found) = found.unzip();
     Some(Margin { limit: Limit::StressMarginLeast, flight_point, found, allowed: Some(least), share })

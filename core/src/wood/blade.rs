@@ -70,14 +70,23 @@ impl BladeBeam {
     /// A species that is not known; stations that [`Job::check`](crate::job::Job::check) refuses.
     pub fn new(rig: &Rig) -> Result<Self, WoodError> {
         let wood = rig.job.wood.clone().unwrap_or_default();
+        Self::of(rig, shapes(&rig.job), material(&wood)?)
+    }
+
+    /// The blade of another rig of the same wood whose stations have the same sections and thickness ratios: their outlines are not measured again.
+    pub(super) fn like(&self, rig: &Rig) -> Result<Self, WoodError> {
+        Self::of(rig, self.drawn.clone(), self.material.clone())
+    }
+
+    fn of(rig: &Rig, drawn: Vec<Drawn>, material: Material) -> Result<Self, WoodError> {
+        let wood = rig.job.wood.clone().unwrap_or_default();
         let blade = &rig.rotor.blade;
         let stations_m: Vec<f64> = blade.station_radii_m().collect();
         let radii_m = radii(blade, &stations_m);
-        let drawn = shapes(&rig.job);
         let thickness: Vec<f64> = rig.job.propeller.stations.iter().map(|s| s.thickness_ratio).collect();
         let beam = Self {
             blades: blade.count,
-            material: material(&wood)?,
+            material,
             chords_m: radii_m.iter().map(|r| blade.cut(*r).chord_m).collect(),
             angles_rad: radii_m.iter().map(|r| blade.cut(*r).angle_rad + rig.turn_rad()).collect(),
             turn_rad: rig.turn_rad(),

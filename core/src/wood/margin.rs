@@ -10,13 +10,24 @@ use crate::rig::Rig;
 /// # Errors
 /// A species that is not known.
 pub fn least_margin(rig: &Rig) -> Result<Option<(String, f64)>, WoodError> {
-    let beam = BladeBeam::new(rig)?;
+    BladeBeam::new(rig).map(|beam| least(rig, &beam))
+}
+
+/// The same for a rig of the same wood, sections and thickness ratios as those of a blade already measured.
+///
+/// # Errors
+/// Stations that [`Job::check`](crate::job::Job::check) refuses.
+pub fn least_margin_like(like: &BladeBeam, rig: &Rig) -> Result<Option<(String, f64)>, WoodError> {
+    like.like(rig).map(|beam| least(rig, &beam))
+}
+
+fn least(rig: &Rig, beam: &BladeBeam) -> Option<(String, f64)> {
     let overspeed = rig.job.wood.clone().unwrap_or_default().overspeed;
     let all = cases(rig, overspeed);
-    let loaded = all.iter().filter_map(|case| Loaded::new(rig, &beam, case));
+    let loaded = all.iter().filter_map(|case| Loaded::new(rig, beam, case));
     let least = loaded.map(|case| {
-        let margin = beam.places.iter().map(|p| case.margin(&beam, p)).fold(f64::INFINITY, f64::min);
+        let margin = beam.places.iter().map(|p| case.margin(beam, p)).fold(f64::INFINITY, f64::min);
         (case.name, margin)
     });
-    Ok(least.min_by(|a, b| a.1.total_cmp(&b.1)))
+    least.min_by(|a, b| a.1.total_cmp(&b.1))
 }

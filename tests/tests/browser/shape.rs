@@ -48,7 +48,9 @@ async fn a_twist_is_made_compared_used_and_taken_back() -> Result<()> {
         assert!(ghosts.as_u64().context("no number")? >= 4, "ghosts: {ghosts}");
         browser.wait_for_text("Grey: twist, Cruise.").await?;
         browser.press("Compare twist, Cruise").await?;
-        let gone = async || Ok(browser.run("return !document.querySelector('svg .ghost')").await?.as_bool().filter(|b| *b));
+        let gone = async || {
+            Ok(browser.run("return !document.querySelector('svg .ghost')").await?.as_bool().filter(|b| *b))
+        };
         browser.wait("no ghost", gone).await?;
         browser.press("Use twist, Cruise").await?;
         wait_for_angle(browser, angle(&after, STATION)?).await?;

@@ -11,7 +11,8 @@ use crate::rig::Rig;
 use crate::rotor::Rotor;
 use crate::shape::ShapeError;
 use crate::shape::brief::{Look, brief, figure_at, look};
-use crate::shape::limits::{margins, standing};
+use crate::shape::limits::{beam, margins, standing};
+use crate::wood::BladeBeam;
 
 /// Limits count as kept to this share.
 pub(super) const KEPT: f64 = 1e-6;
@@ -60,6 +61,7 @@ pub(super) struct Ground {
     points: Vec<FlightPoint>,
     drawn: Vec<Option<f64>>,
     standing: Option<FlightPoint>,
+    beam: Option<BladeBeam>,
     /// Number of margins.
     pub(super) count: usize,
     /// The last answers of the points, and of the standing one.
@@ -83,6 +85,7 @@ impl Ground {
         };
         let points: Vec<FlightPoint> = rig.job.flight_points.iter().filter(counts).cloned().collect();
         let standing = standing(rig, &limits);
+        let beam = beam(rig, &limits);
         let near = RefCell::new((vec![Near::default(); points.len()], Near::default()));
         let mut ground = Self {
             rig: rig.clone(),
@@ -91,6 +94,7 @@ impl Ground {
             points,
             drawn: Vec::new(),
             standing,
+            beam,
             count: 0,
             near,
         };
@@ -136,7 +140,7 @@ impl Ground {
     pub(super) fn margins(&self, rig: &Rig, looks: &[Look]) -> Vec<Margin> {
         let (_, near) = &mut *self.near.borrow_mut();
         let standing = self.standing.as_ref().map(|p| look(rig, p, near).brief);
-        margins(rig, &self.limits, looks, standing.as_ref())
+        margins(rig, &self.limits, looks, standing.as_ref(), self.beam.as_ref())
     }
 
     pub(super) fn trial(&self, x: &[f64; FREE]) -> Trial {
