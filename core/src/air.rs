@@ -78,14 +78,19 @@ impl Air {
             return Err(AirError::Offset(offset_k));
         }
         let (standard_k, pressure_pa) = standard_temperature_and_pressure(altitude_m);
-        let temperature_k = standard_k + offset_k;
-        Ok(Self {
+        Ok(Self::of(pressure_pa, standard_k + offset_k))
+    }
+
+    /// The air of a pressure (Pa) and a temperature (K), both above zero.
+    #[must_use]
+    pub fn of(pressure_pa: f64, temperature_k: f64) -> Self {
+        Self {
             temperature_k,
             pressure_pa,
             density_kg_m3: pressure_pa / (GAS_CONSTANT * temperature_k),
             sound_speed_m_s: (HEAT_RATIO * GAS_CONSTANT * temperature_k).sqrt(),
             viscosity_pa_s: sutherland_viscosity_pa_s(temperature_k),
-        })
+        }
     }
 
     /// Density over sea-level standard density.

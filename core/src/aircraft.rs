@@ -66,6 +66,16 @@ pub fn drag_n(a: &Aeroplane, air: &Air, airspeed_m_s: f64) -> Option<f64> {
     (qs > 0.0).then(|| qs * a.drag.cd0 + induced_factor(&a.drag) * w * w / qs)
 }
 
+/// The aircraft with its drag without lift multiplied.
+#[must_use]
+pub fn with_drag(aircraft: &Aircraft, factor: f64) -> Aircraft {
+    let mut other = aircraft.clone();
+    if let Aircraft::Aeroplane(a) = &mut other {
+        a.drag.cd0 *= factor;
+    }
+    other
+}
+
 /// `k` as given, or `1/(π e AR)`.
 #[must_use]
 pub fn induced_factor(drag: &Drag) -> f64 {

@@ -9,7 +9,7 @@
 //! propeller unless they say otherwise.
 
 use crate::air::Air;
-use crate::job::Engine;
+use crate::job::{Engine, Factors};
 
 mod electric;
 mod piston;
@@ -35,10 +35,18 @@ impl Shaft {
     pub fn new(engine: &Engine, engines: f64) -> Option<Self> {
         match engine {
             Engine::Piston(p) => PistonShaft::new(p).map(Self::Piston),
-            Engine::Electric(e) => {
-                Some(Self::Electric(ElectricShaft { data: e.clone(), motors: engines, rounding_a: 0.0 }))
-            }
+            Engine::Electric(e) => Some(Self::Electric(ElectricShaft::new(e, engines))),
         }
+    }
+
+    /// The same engine with its power, and what it consumes for a power, multiplied.
+    #[must_use]
+    pub fn with_factors(mut self, factors: &Factors) -> Self {
+        match &mut self {
+            Self::Piston(p) => p.factors = *factors,
+            Self::Electric(e) => e.factors = *factors,
+        }
+        self
     }
 
     /// The same with the corner at a motor's current limit rounded off over a share of it, on the safe side: what follows from it then

@@ -14,7 +14,7 @@ use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::{Condition, Loads};
 use root::Missed;
 use settle::{Demand, Free, Governed, Met, STEPS};
-use slipstream::kept_share;
+pub(crate) use slipstream::kept_share;
 use trail::Trail;
 
 mod ceiling;
@@ -80,7 +80,7 @@ pub fn condition(rig: &Rig, point: &FlightPoint, air: Air) -> Result<Condition, 
 /// Whether a flight point asks an aeroplane for level flight slower than its stall.
 #[must_use]
 pub fn stalled(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
-    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return false };
+    let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return false };
     let stall = speeds(a, air).stall_m_s;
     point.setting == Setting::Level {} && stall.is_some_and(|stall| point.airspeed_m_s.unwrap_or(0.0) < stall)
 }
@@ -176,7 +176,7 @@ impl<'r> Solver<'r> {
 
     /// Level flight, or hover, whether or not the engine gives what it takes.
     fn level_by_thrust(&self, at: &Condition, trail: &Trail) -> Result<Met, State> {
-        let aircraft = self.rig.job.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
+        let aircraft = self.rig.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
         let asked = thrust_asked_n(aircraft, &at.air, at.airspeed_m_s).ok_or(State::OutOfReach)?;
         let kept = kept_share(self.rig);
         self.demanded(at, &|loads, _| loads.thrust_n * kept - asked, trail)

@@ -7,6 +7,7 @@ mod carved;
 mod chart;
 mod fit;
 mod limit;
+mod logbook;
 mod search;
 mod shape;
 mod strength;
@@ -22,6 +23,7 @@ pub use fit::{
     PitchWorth, TIP_MACHS, TakeOff, TipMach, WorthOf,
 };
 pub use limit::{Limit, Margin};
+pub use logbook::{Change, Estimate, FactorFound, LogLine, Logged, Means, Pair};
 pub use search::{AimResult, FreeValue, Search, Stopped};
 pub use shape::{Bound, Brief, Compared, LeastLoss, LossStation, Origin, Twist, TwistStation};
 pub use strength::{

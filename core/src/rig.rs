@@ -3,11 +3,11 @@
 use std::f64::consts::PI;
 
 use crate::air::{Air, AirError};
-use crate::aircraft::propellers;
+use crate::aircraft::{propellers, with_drag};
 use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
 use crate::fit::Along;
-use crate::job::{FlightPoint, Job, PitchControl, Propeller};
+use crate::job::{Aircraft, Factors, FlightPoint, Job, PitchControl, Propeller};
 use crate::result::{Analysis, Fit, Note, PitchWorth, PointResult, PropellerFigures, SectionPoint};
 use crate::rotor::{Condition, CurvePoint, DepartureMap, Rotor, coefficient_curves, departure_map};
 use crate::{fit, report};
@@ -24,6 +24,8 @@ pub struct Rig {
     pub rotor: Rotor,
     /// Its engine, where it has one.
     pub shaft: Option<Shaft>,
+    /// Its aircraft, where it has one, with the drag that the logbook has found where that is used.
+    pub aircraft: Option<Aircraft>,
 }
 
 impl Rig {
@@ -39,9 +41,23 @@ impl Rig {
     /// assert_eq!(analysis.flight_points.len(), job.flight_points.len());
     /// ```
     pub fn new(job: &Job) -> Result<Self, BladeError> {
+        let used = job.logbook.as_ref().filter(|logbook| logbook.in_use);
+        Self::with_factors(job, &used.and_then(|logbook| logbook.factors).unwrap_or_default())
+    }
+
+    /// The same with factors in place of those of the job's logbook.
+    ///
+    /// # Errors
+    /// Only for a job that [`Job::check`] refuses.
+    pub fn with_factors(job: &Job, factors: &Factors) -> Result<Self, BladeError> {
         let engines = job.aircraft.as_ref().map_or(1.0, propellers);
         let shaft = job.engine.as_ref().and_then(|engine| Shaft::new(engine, engines));
-        Ok(Self { rotor: Rotor::new(Blade::new(job)?, &job.method), shaft, job: job.clone() })
+        Ok(Self {
+            rotor: Rotor::new(Blade::new(job)?, &job.method).taking(factors.propeller_power),
+            shaft: shaft.map(|shaft| shaft.with_factors(factors)),
+            aircraft: job.aircraft.as_ref().map(|aircraft| with_drag(aircraft, factors.drag_area)),
+            job: job.clone(),
+        })
     }
 
     /// The same job with another propeller of the same sections.
@@ -51,7 +67,8 @@ impl Rig {
     pub fn with_propeller(&self, propeller: Propeller) -> Result<Self, BladeError> {
         let job = Job { propeller, ..self.job.clone() };
         let blade = Blade::with(&job, &self.rotor.blade.families)?;
-        Ok(Self { rotor: Rotor::new(blade, &job.method), shaft: self.shaft.clone(), job })
+        let rotor = Rotor::new(blade, &job.method).taking(self.rotor.power_factor());
+        Ok(Self { rotor, shaft: self.shaft.clone(), aircraft: self.aircraft.clone(), job })
     }
 
     /// Every flight point worked out.

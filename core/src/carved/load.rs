@@ -63,6 +63,14 @@ impl Set {
     }
 }
 
+/// The job with the propeller of mean blades in place of the drawn one.
+///
+/// # Errors
+/// Blades that cannot be.
+pub fn mean_rig(rig: &Rig, measured: &Measured) -> Result<Rig, CarvedError> {
+    Set::new(rig, measured).map(|set| set.mean)
+}
+
 fn blades(rig: &Rig, readings: &Readings, measured: &Measured) -> Vec<CarvedBlade> {
     let mean = measured.mean();
     let drawn = &rig.rotor.blade;

@@ -19,9 +19,9 @@ mod plane;
 
 pub use doubt::doubts;
 pub use import::angle_of;
-pub use load::{analyse, analysed};
+pub use load::{analyse, analysed, mean_rig};
 pub use measured::{Measured, Size};
-pub use plan::{plan, usual_point};
+pub use plan::{plan, planed, usual_point};
 pub use plane::{Cuts, Profile, Slab};
 
 use thiserror::Error;

@@ -75,6 +75,25 @@ fn wanted(rig: &Rig, planned: &Measured, at: &Condition) -> Result<Vec<f64>, Car
     Ok(planned.radii_m.iter().map(|&r| angle(r).unwrap_or_else(|| drawn(r))).collect())
 }
 
+/// The blades with every face planed by an angle (rad) that is wanted at its radius, as far as the least chord and thickness allow.
+/// Stations without a flat face stay as they are.
+#[must_use]
+pub fn planed(rig: &Rig, measured: &Measured, wanted_rad: impl Fn(f64) -> f64) -> Measured {
+    let bench = Bench::new(rig, measured);
+    let mut after = measured.clone();
+    for (s, &r) in measured.radii_m.iter().enumerate() {
+        let wanted = wanted_rad(r);
+        for size in after.blades.iter_mut().map(|blade| &mut blade[s]) {
+            let piece = bench.piece(s, size);
+            let turn = wanted.clamp(piece.farthest(-1.0), piece.farthest(1.0));
+            let slab = piece.turned(turn);
+            size.angle_rad = slab.face_rad + piece.face_to_chord(&slab);
+            (size.chord_m, size.thickness_m) = (slab.chord_m, slab.thickness_m);
+        }
+    }
+    after
+}
+
 /// The blades on the bench.
 struct Bench<'r> {
     rig: &'r Rig,

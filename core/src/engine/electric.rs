@@ -2,7 +2,7 @@
 
 use std::f64::consts::PI;
 
-use crate::job::Electric;
+use crate::job::{Electric, Factors};
 
 /// An electric motor ready to be asked.
 #[derive(Clone, Debug)]
@@ -12,6 +12,7 @@ pub struct ElectricShaft {
     pub(super) motors: f64,
     /// By how much the current limit is rounded off, A; 0 is the limit itself.
     pub(super) rounding_a: f64,
+    pub(super) factors: Factors,
 }
 
 /// The electric side at one shaft load.
@@ -34,6 +35,10 @@ fn rounded_least(a: f64, b: f64, width: f64) -> f64 {
 }
 
 impl ElectricShaft {
+    pub(super) fn new(data: &Electric, motors: f64) -> Self {
+        Self { data: data.clone(), motors, rounding_a: 0.0, factors: Factors::default() }
+    }
+
     fn open_circuit_v(&self) -> f64 {
         f64::from(self.data.battery.cells) * self.data.battery.open_circuit_v_per_cell
     }
@@ -63,25 +68,43 @@ impl ElectricShaft {
             (duty * self.open_circuit_v() - back_v) / (self.motor_ohm() + duty * duty * self.battery_ohm());
         let held =
             self.data.max_current_a.map_or(current, |most| rounded_least(current, most, self.rounding_a));
-        self.torque_per_a() * (held - self.data.no_load_current_a) * motor_rpm * PI / 30.0
+        let power_w = self.torque_per_a() * (held - self.data.no_load_current_a) * motor_rpm * PI / 30.0;
+        self.factors.engine_power * power_w
     }
 
+    /// The electric side at a propeller rpm and shaft power; `None` where no duty up to 1 gives it.
     pub(super) fn electrics(&self, rpm: f64, power_w: f64) -> Option<Electrics> {
+        let (electrics, reachable) = self.drawn(rpm, power_w);
+        reachable.then_some(electrics)
+    }
+
+    /// Battery current of this motor at a propeller rpm and shaft power, A; at full duty also where that falls short.
+    pub(crate) fn battery_current_a(&self, rpm: f64, power_w: f64) -> f64 {
+        self.drawn(rpm, power_w).0.battery_current_a
+    }
+
+    /// The electric side, duty at most 1, and whether it gives the power. The factor of power stands for what battery and controller
+    /// give short or over: the duty follows it, the current the torque.
+    fn drawn(&self, rpm: f64, power_w: f64) -> (Electrics, bool) {
         let motor_rpm = rpm * self.data.gear_ratio;
+        let per_a = self.torque_per_a();
         let torque = power_w / (motor_rpm * PI / 30.0);
-        let current = torque / self.torque_per_a() + self.data.no_load_current_a;
-        let motor_v = current * self.motor_ohm() + motor_rpm / self.data.kv_rpm_per_v;
+        let current = torque / per_a + self.data.no_load_current_a;
+        let nominal = torque / self.factors.engine_power / per_a + self.data.no_load_current_a;
+        let motor_v = nominal * self.motor_ohm() + motor_rpm / self.data.kv_rpm_per_v;
         let (voc, rb) = (self.open_circuit_v(), self.battery_ohm());
         // d Voc − d² Rb I = motor voltage; the smaller root, written without a division by Rb I.
-        let under_root = voc * voc - 4.0 * rb * current * motor_v;
+        let under_root = voc * voc - 4.0 * rb * nominal * motor_v;
         let duty = 2.0 * motor_v / (voc + under_root.max(0.0).sqrt());
-        let within_current = current <= self.data.max_current_a.unwrap_or(f64::INFINITY) * (1.0 + 1e-9);
+        let within_current = nominal <= self.data.max_current_a.unwrap_or(f64::INFINITY) * (1.0 + 1e-9);
         let reachable = under_root >= 0.0 && duty <= 1.0 + 1e-9 && within_current;
-        reachable.then(|| Electrics {
+        let duty = duty.min(1.0);
+        let electrics = Electrics {
             motor_current_a: current,
-            battery_current_a: duty * current,
+            battery_current_a: self.factors.consumption * duty * current,
             battery_voltage_v: voc - rb * duty * current,
-            duty: duty.min(1.0),
-        })
+            duty,
+        };
+        (electrics, reachable)
     }
 }

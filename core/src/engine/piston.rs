@@ -2,7 +2,7 @@
 
 use crate::air::{Air, RHO0_KG_M3};
 use crate::curve::Curve;
-use crate::job::{AltitudeLaw, Interpolation, Piston};
+use crate::job::{AltitudeLaw, Factors, Interpolation, Piston};
 
 /// A piston engine ready to be asked.
 #[derive(Clone, Debug)]
@@ -11,6 +11,7 @@ pub struct PistonShaft {
     /// Specific fuel consumption over load, kg/kWh, where it is given by the load.
     by_load: Option<Curve>,
     pub(super) data: Piston,
+    pub(super) factors: Factors,
 }
 
 impl PistonShaft {
@@ -22,7 +23,8 @@ impl PistonShaft {
             Interpolation::Linear => Curve::polyline(rpm, power),
         };
         let (load, bsfc) = data.bsfc_by_load.iter().map(|b| (b.load, b.bsfc_kg_per_kwh)).unzip();
-        Some(Self { curve: curve?, by_load: Curve::new(load, bsfc), data: data.clone() })
+        let factors = Factors::default();
+        Some(Self { curve: curve?, by_load: Curve::new(load, bsfc), data: data.clone(), factors })
     }
 
     /// Lowest and highest propeller rpm of the curve.
@@ -32,7 +34,7 @@ impl PistonShaft {
     }
 
     pub(super) fn power_w(&self, rpm: f64, air: &Air) -> f64 {
-        self.curve.at(rpm * self.data.gear_ratio) * self.altitude_factor(air)
+        self.factors.engine_power * self.curve.at(rpm * self.data.gear_ratio) * self.altitude_factor(air)
     }
 
     /// Fuel mass flow, kg/s. By the load it needs the full-throttle power there, `None` without.
@@ -42,7 +44,7 @@ impl PistonShaft {
             Some(by_load) => by_load.at(power_w / available_w?),
             None => self.data.bsfc_kg_per_kwh?,
         };
-        Some(bsfc * power_w / 3.6e6)
+        Some(self.factors.consumption * bsfc * power_w / 3.6e6)
     }
 
     fn altitude_factor(&self, air: &Air) -> f64 {

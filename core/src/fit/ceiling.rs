@@ -24,7 +24,7 @@ const CONVERGED_M: f64 = 0.5;
 /// atmosphere's table. `None` for other jobs.
 #[must_use]
 pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
-    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
+    let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return None };
     rig.shaft.as_ref()?;
     let best = |h: f64| best_climb_m_s(rig, a, h, isa_offset_k);
     let (lowest, highest) = (best(0.0), best(HIGHEST_M));

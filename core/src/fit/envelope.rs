@@ -29,7 +29,7 @@ pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[
     let speeds_m_s = (0..count).map(|i| end * f64::from(i) / f64::from(count - 1));
     let course = Course::new(rig, &at, speeds_m_s.collect(), radius_fractions);
     let (points, followed) = course.points();
-    let aeroplane = match &rig.job.aircraft {
+    let aeroplane = match &rig.aircraft {
         Some(Aircraft::Aeroplane(a)) => Some(a),
         _ => None,
     };
@@ -48,7 +48,7 @@ pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[
 
 /// The stall in the air of a condition, m/s; 0 where none is known.
 pub(super) fn stall_m_s(rig: &Rig, at: &Condition) -> f64 {
-    match &rig.job.aircraft {
+    match &rig.aircraft {
         Some(Aircraft::Aeroplane(a)) => speeds(a, &at.air).stall_m_s.unwrap_or(0.0),
         _ => 0.0,
     }
@@ -88,7 +88,7 @@ impl<'r> Course<'r> {
         let mut followed = Followed::default();
         let (full, level) = (self.full(&mut followed.full), self.level(&mut followed.level));
         let asked = |v: f64| {
-            let aircraft = self.solver.rig.job.aircraft.as_ref()?;
+            let aircraft = self.solver.rig.aircraft.as_ref()?;
             let drag = thrust_asked_n(aircraft, &self.at.air, v)? * propellers(aircraft);
             Some(drag / kept_share(self.solver.rig))
         };

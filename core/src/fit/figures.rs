@@ -23,7 +23,7 @@ fn tip_mach(rig: &Rig, at: &Condition) -> f64 {
 /// What full throttle comes to, in figures.
 pub(super) fn full_throttle(rig: &Rig, full: &Full, departure_deg: Vec<Option<f64>>) -> FullThrottle {
     let (at, loads) = (&full.condition, &full.loads);
-    let aircraft = rig.job.aircraft.as_ref();
+    let aircraft = rig.aircraft.as_ref();
     let thrust_n = loads.thrust_n * aircraft.map_or(1.0, propellers);
     let climb = aircraft.filter(|a| matches!(a, Aircraft::Aeroplane(_))).and_then(|a| {
         let drag = thrust_asked_n(a, &at.air, at.airspeed_m_s)? * propellers(a);
@@ -52,7 +52,7 @@ pub(super) fn level(
     departure_deg: Vec<Option<f64>>,
 ) -> Level {
     let (rpm, power) = (rpm_of(at), power_w(loads, at));
-    let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
+    let engines = rig.aircraft.as_ref().map_or(1.0, propellers);
     let shaft = rig.shaft.as_ref().filter(|_| state == State::Ok);
     let endurance_s = shaft.and_then(|s| s.endurance_s(rpm, power, &at.air, engines));
     let given = shaft.and_then(|s| s.available_w(rpm, &at.air));

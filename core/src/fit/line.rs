@@ -66,7 +66,7 @@ pub fn level_line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
 /// The slowest and the fastest level flight.
 fn level_span_m_s(rig: &Rig, at: &Condition) -> Option<(f64, f64)> {
     let top = top_speed::fastest(rig, at).ok().map(|full| full.condition.airspeed_m_s);
-    match rig.job.aircraft.as_ref()? {
+    match rig.aircraft.as_ref()? {
         Aircraft::Aeroplane(a) => {
             let named = speeds(a, &at.air);
             let slowest = named.stall_m_s.unwrap_or(SLOWEST_SHARE * named.least_power_m_s);

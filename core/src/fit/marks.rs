@@ -52,7 +52,7 @@ pub(super) fn marks(
         closed_throttle_dive: dive(rig, at).map(|f| Mark {
             airspeed_m_s: f.condition.airspeed_m_s,
             rpm: rpm_of(&f.condition),
-            value: f.loads.thrust_n * rig.job.aircraft.as_ref().map_or(1.0, propellers),
+            value: f.loads.thrust_n * rig.aircraft.as_ref().map_or(1.0, propellers),
             held_at_limit: false,
         }),
         best_range: cruise(|l| l.range_m),

@@ -23,7 +23,7 @@ fn add_engine(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
     m.engine_rpm = Some(rpm * shaft.gear_ratio());
     m.available_power_w = shaft.available_w(rpm, &at.air);
     m.power_share = m.available_power_w.map(|a| power / a);
-    let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
+    let engines = rig.aircraft.as_ref().map_or(1.0, propellers);
     m.fuel_kg_per_h = shaft.fuel_kg_s(rpm, power, &at.air).map(|f| 3600.0 * f * engines);
     if let Some(e) = shaft.electrics(rpm, power) {
         m.motor_current_a = Some(e.motor_current_a);
@@ -34,7 +34,7 @@ fn add_engine(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
 }
 
 fn add_aircraft(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
-    let (Some(aircraft), Some(thrust)) = (&rig.job.aircraft, figures.thrust_n) else { return };
+    let (Some(aircraft), Some(thrust)) = (&rig.aircraft, figures.thrust_n) else { return };
     let total = thrust * propellers(aircraft);
     m.total_thrust_n = Some(total);
     let kept = kept_share(rig);

@@ -12,8 +12,8 @@ use crate::job::Aircraft;
 use crate::rig::Rig;
 
 /// The share of the thrust that is left; 1 where the job names no parts in the slipstream.
-pub(super) fn kept_share(rig: &Rig) -> f64 {
-    let Some(aircraft @ Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return 1.0 };
+pub(crate) fn kept_share(rig: &Rig) -> f64 {
+    let Some(aircraft @ Aircraft::Aeroplane(a)) = &rig.aircraft else { return 1.0 };
     let discs_m2 = propellers(aircraft) * PI * rig.rotor.blade.radius_m.powi(2);
     1.0 - a.slipstream_drag_area_m2.unwrap_or(0.0) / discs_m2
 }

@@ -40,7 +40,7 @@ pub fn take_off(rig: &Rig, envelope: &Envelope) -> Option<TakeOff> {
 /// The same without an envelope, from full throttle at few speeds.
 #[must_use]
 pub fn take_off_in(rig: &Rig, air: &Air) -> Option<TakeOff> {
-    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
+    let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return None };
     let (solver, mut trail) = (Solver::new(rig), Trail::default());
     let (kept, engines) = (kept_share(rig), f64::from(a.engines));
     let fastest = SCREEN * speeds(a, air).stall_m_s?;
@@ -54,7 +54,7 @@ pub fn take_off_in(rig: &Rig, air: &Air) -> Option<TakeOff> {
 
 /// Take-off by all propellers' thrust over speed.
 fn along(rig: &Rig, air: &Air, (speed, thrust): (Vec<f64>, Vec<f64>)) -> Option<TakeOff> {
-    let Some(Aircraft::Aeroplane(a)) = &rig.job.aircraft else { return None };
+    let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return None };
     let stall = speeds(a, air).stall_m_s?;
     let starts_at_rest = speed.first() == Some(&0.0);
     let reaches = speed.last().is_some_and(|&v| v >= SCREEN * stall);

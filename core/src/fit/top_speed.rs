@@ -78,7 +78,7 @@ struct Chase<'r> {
 
 impl<'r> Chase<'r> {
     fn new(solver: Solver<'r>, at: &Condition, hold: bool) -> Result<Self, State> {
-        let aircraft = solver.rig.job.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
+        let aircraft = solver.rig.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
         solver.rig.shaft.as_ref().ok_or(State::NeedsEngine)?;
         Ok(Self { solver, aircraft, at: *at, hold })
     }

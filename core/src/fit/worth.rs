@@ -53,7 +53,7 @@ fn figure(rig: &Rig, point: &FlightPoint, turn_deg: f64) -> Option<f64> {
     let airspeed_m_s = point.airspeed_m_s.unwrap_or(0.0);
     let at = Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: turn_deg.to_radians() };
     let solver = Solver::new(rig);
-    let all = rig.job.aircraft.as_ref().map_or(1.0, propellers);
+    let all = rig.aircraft.as_ref().map_or(1.0, propellers);
     let mut trail = Trail::default();
     match point.setting {
         Setting::Level {} => {

@@ -96,6 +96,8 @@ pub struct Rotor {
     /// The blade.
     pub blade: Blade,
     method: Method,
+    /// What the torque of the elements is multiplied by.
+    power_factor: f64,
     rings: Vec<Ring>,
     /// Few elements, for a first look.
     rough_rings: Vec<Ring>,
@@ -115,10 +117,24 @@ impl Rotor {
     /// A propeller by its blade and the method's settings.
     #[must_use]
     pub fn new(blade: Blade, method: &Method) -> Self {
-        let mut rotor = Self { blade, method: method.clone(), rings: Vec::new(), rough_rings: Vec::new() };
+        let (rings, rough_rings) = (Vec::new(), Vec::new());
+        let mut rotor = Self { blade, method: method.clone(), power_factor: 1.0, rings, rough_rings };
         rotor.rings = rotor.elements(method.elements);
         rotor.rough_rings = rotor.elements(method.elements.min(ROUGH_ELEMENTS));
         rotor
+    }
+
+    /// The same propeller taking a multiple of its torque, as a logbook may have found.
+    #[must_use]
+    pub fn taking(mut self, power_factor: f64) -> Self {
+        self.power_factor = power_factor;
+        self
+    }
+
+    /// What the torque of the elements is multiplied by.
+    #[must_use]
+    pub fn power_factor(&self) -> f64 {
+        self.power_factor
     }
 
     /// Cosine-spaced elements between hub and tip.
@@ -183,7 +199,7 @@ impl Rotor {
         let (cn, ct) = balance.normal_and_tangential();
         let w = balance.speed_m_s;
         let head = 0.5 * at.air.density_kg_m3 * w * w * ring.cut.chord_m * f64::from(self.blade.count);
-        (head * cn, head * ct * ring.cut.radius_m)
+        (head * cn, self.power_factor * head * ct * ring.cut.radius_m)
     }
 
     /// Thrust and torque at a condition.

@@ -36,7 +36,8 @@ impl Rotor {
                 let element = blade.element(&own, at).0;
                 let c = element.section.at(element.angle_rad - flow.inflow_rad);
                 let force = head * own.cut.chord_m;
-                let (thrust, drag) = (force * (c.cl * cos - c.cd * sin), force * (c.cl * sin + c.cd * cos));
+                let thrust = force * (c.cl * cos - c.cd * sin);
+                let drag = self.power_factor * force * (c.cl * sin + c.cd * cos);
                 load.thrust_n += thrust;
                 load.bending_n_m += thrust * r;
                 load.drag_n += drag;

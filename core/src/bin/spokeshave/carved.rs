@@ -8,10 +8,9 @@ use serde::Serialize;
 use spokeshave::carved::{self, CarvedError, import};
 use spokeshave::job::Job;
 use spokeshave::result::{Carved, RemovalPlan};
-use spokeshave::rig::Rig;
-use spokeshave::sheet;
+use spokeshave::sheet::SheetError;
 
-use crate::input::{Format, JobSource, Outcome, Stop, point_index, print, print_csv, print_json, read};
+use crate::input::{Format, JobSource, Outcome, Stop, point_index, print, print_csv, print_json, with_sheet};
 
 #[derive(clap::Args)]
 #[command(
@@ -46,7 +45,7 @@ struct Both<'a> {
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
-    let rig = with_readings(args.source.rig()?, args.readings.as_ref())?;
+    let rig = with_sheet(args.source.rig()?, args.readings.as_ref(), put)?;
     if args.job {
         print(&rig.job.to_json())?;
         return Ok(true);
@@ -74,18 +73,9 @@ pub(crate) fn run(args: &Args) -> Outcome {
     Ok(plan.is_some())
 }
 
-fn with_readings(rig: Rig, path: Option<&PathBuf>) -> Result<Rig, Stop> {
-    let Some(path) = path else { return Ok(rig) };
-    let text = read(path, sheet::MOST_BYTES, "a sheet of readings")?;
-    let bad = |e: &dyn std::fmt::Display| Stop::BadInput(format!("{}: {e}", path.display()));
-    let (carved, unused) =
-        import::read(&text, &rig.job.propeller, rig.job.carved.as_ref()).map_err(|e| bad(&e))?;
-    for column in unused {
-        eprintln!("spokeshave: column {column:?} is not used");
-    }
-    let job = Job { carved: Some(carved), ..rig.job };
-    match job.check().as_slice() {
-        [] => Rig::new(&job).map_err(Stop::bad),
-        [problem, ..] => Err(bad(problem)),
-    }
+/// The readings of a sheet, put into a job.
+fn put(text: &str, job: &mut Job) -> Result<Vec<String>, SheetError> {
+    let (carved, unused) = import::read(text, &job.propeller, job.carved.as_ref())?;
+    job.carved = Some(carved);
+    Ok(unused)
 }

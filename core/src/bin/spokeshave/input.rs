@@ -5,6 +5,7 @@ use std::path::{Path, PathBuf};
 
 use spokeshave::job::{DEMOS, Demo, Job, MOST_BYTES};
 use spokeshave::rig::Rig;
+use spokeshave::sheet::{MOST_BYTES as MOST_SHEET_BYTES, SheetError};
 
 /// Whether every flight point asked for has an answer, or why the command stopped.
 pub(crate) type Outcome = Result<bool, Stop>;
@@ -133,6 +134,25 @@ pub(crate) fn run_demo(args: &DemoArgs) -> Outcome {
 pub(crate) fn run_schema() -> Outcome {
     print_json(&spokeshave::job::schema())?;
     Ok(true)
+}
+
+/// The job with what a sheet of readings says put in; without a sheet as it is.
+pub(crate) fn with_sheet(
+    rig: Rig,
+    path: Option<&PathBuf>,
+    put: impl Fn(&str, &mut Job) -> Result<Vec<String>, SheetError>,
+) -> Result<Rig, Stop> {
+    let Some(path) = path else { return Ok(rig) };
+    let text = read(path, MOST_SHEET_BYTES, "a sheet of readings")?;
+    let bad = |e: &dyn std::fmt::Display| Stop::BadInput(format!("{}: {e}", path.display()));
+    let mut job = rig.job;
+    for column in put(&text, &mut job).map_err(|e| bad(&e))? {
+        eprintln!("spokeshave: column {column:?} is not used");
+    }
+    match job.check().as_slice() {
+        [] => Rig::new(&job).map_err(Stop::bad),
+        [problem, ..] => Err(bad(problem)),
+    }
 }
 
 /// Prints a text and ends its line.

@@ -10,6 +10,7 @@ mod carved;
 mod fit;
 mod import;
 mod input;
+mod logbook;
 mod map;
 mod polar;
 mod sections;
@@ -39,6 +40,7 @@ const EXAMPLES: &str = "Examples:
   spokeshave shape JOB.json least-loss --point Cruise --job > NEW.json    least induced loss, as a job of its own
   spokeshave carved JOB.json --readings READINGS.csv    the blades as measured, and what to take off
   spokeshave bench JOB.json strength               stress and margin by station, vibration, weight, hub
+  spokeshave logbook JOB.json --readings READINGS.csv   what ground runs and flights tell, and what to change
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
@@ -62,6 +64,8 @@ enum Command {
     Bench(bench::Args),
     /// The blades as carved: differences, what they do, what can be put right
     Carved(carved::Args),
+    /// What readings of ground runs and flights tell, and what to change
+    Logbook(logbook::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),
     /// Departure over speed and radius at a flight point's air
@@ -87,6 +91,7 @@ fn main() -> ExitCode {
         Command::Shape(args) => shape::run(&args),
         Command::Bench(args) => bench::run(&args),
         Command::Carved(args) => carved::run(&args),
+        Command::Logbook(args) => logbook::run(&args),
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),

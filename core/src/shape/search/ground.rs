@@ -115,7 +115,7 @@ impl Ground {
         let mut ground = self.clone();
         let rig = &mut ground.rig;
         rig.job.method.elements = rig.job.method.elements.min(FEW_ELEMENTS);
-        rig.rotor = Rotor::new(rig.rotor.blade.clone(), &rig.job.method);
+        rig.rotor = Rotor::new(rig.rotor.blade.clone(), &rig.job.method).taking(rig.rotor.power_factor());
         rig.shaft = rig.shaft.take().map(|shaft| shaft.rounded(rounded).unwrap_or(shaft));
         ground
     }

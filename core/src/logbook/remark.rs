@@ -1,0 +1,96 @@
+//! Plain words about what readings tell, and what may have gone wrong with one.
+
+use super::equation::{Equation, Told};
+use crate::engine::Shaft;
+use crate::job::LogReading;
+use crate::result::{FactorFound, Pair};
+use crate::rig::Rig;
+
+/// How near a mistaken figure must come to what is expected, as a share.
+const NEAR: f64 = 0.06;
+
+pub(super) fn of_all(equations: &[Option<Equation>], found: &[FactorFound], pairs: &[Pair]) -> Vec<String> {
+    let tells = |what: Told| equations.iter().flatten().any(|e| e.told.contains(&what));
+    let mut remarks = Vec::new();
+    if !tells(Told::Thrust) {
+        remarks.push("Drag cannot be told: no reading is of steady level flight.".to_string());
+    }
+    if !tells(Told::Power) {
+        remarks.push("Engine power cannot be told: no reading is at full throttle.".to_string());
+    }
+    if !tells(Told::Consumption) {
+        remarks.push(
+            "No fuel flow or current was read, so that engine and propeller are known by the quotient of their powers only."
+                .to_string(),
+        );
+    }
+    for pair in pairs {
+        let how = if pair.correlation > 0.0 { "over" } else { "times" };
+        remarks.push(format!(
+            "{} and {} cannot be told apart; {} {how} {} is {:.3} ± {:.3}.",
+            words(pair.first),
+            words(pair.second),
+            words(pair.first).to_lowercase(),
+            words(pair.second).to_lowercase(),
+            pair.value,
+            pair.value * pair.deviation
+        ));
+    }
+    let untold: Vec<&str> = found.iter().filter(|f| !f.told).map(|f| words(f.name)).collect();
+    if !untold.is_empty() {
+        remarks.push(format!(
+            "The readings say little of {}: there stands mostly what was thought before.",
+            untold.join(", ").to_lowercase()
+        ));
+    }
+    remarks
+}
+
+/// The name of a factor for people.
+fn words(name: &str) -> &'static str {
+    match name {
+        "engine_power" => "Engine power",
+        "drag_area" => "Drag area",
+        "propeller_power" => "Propeller power",
+        _ => "Consumption",
+    }
+}
+
+/// What is worth saying of a reading: why it tells nothing, or what may have happened when it is far off.
+pub(super) fn of_reading(
+    rig: &Rig,
+    r: &LogReading,
+    tells: bool,
+    outlier: bool,
+    expected_rpm: Option<f64>,
+) -> String {
+    if r.left_out {
+        return "left out".into();
+    }
+    if !tells {
+        let piston = matches!(rig.shaft, Some(Shaft::Piston(_)));
+        return if piston && r.throttle.is_some_and(|t| t < 1.0) {
+            "tells nothing: what a part of full throttle gives is not known; a fuel flow or level flight would tell".into()
+        } else {
+            "tells nothing: neither full throttle nor level flight nor a consumption, or no answer there"
+                .into()
+        };
+    }
+    if !outlier {
+        return String::new();
+    }
+    let (Some(expected), Some(shaft)) = (expected_rpm, &rig.shaft) else { return "far off".into() };
+    let near = |value: f64| (value / expected - 1.0).abs() < NEAR;
+    let cause = if near(r.engine_rpm * shaft.gear_ratio()) && (shaft.gear_ratio() - 1.0).abs() > 2.0 * NEAR {
+        "perhaps it is the propeller's rpm, not the engine's"
+    } else if near(10.0 * r.engine_rpm) || near(100.0 * r.engine_rpm) {
+        "perhaps the dial counts tens or hundreds"
+    } else if near(2.0 * r.engine_rpm) || near(0.5 * r.engine_rpm) {
+        "perhaps the tachometer is set to another number of blades or pulses"
+    } else if r.airspeed_m_s > 0.0 {
+        "perhaps the airspeed is in another unit, or is not the true one; or it was not steady"
+    } else {
+        "perhaps not at full throttle, or in wind"
+    };
+    format!("far off; {cause}")
+}

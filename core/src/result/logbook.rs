@@ -1,0 +1,126 @@
+//! What the logbook tells, and what to change.
+
+use serde::Serialize;
+
+use super::{Compared, State};
+use crate::job::{Factors, Widths};
+
+/// What the readings tell.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Logged {
+    /// Version of the contract.
+    pub spokeshave: u32,
+    /// The job's title.
+    pub title: String,
+    /// Whether the propeller is the carved one, by its readings, or the drawn one.
+    pub as_carved: bool,
+    /// The factors, their uncertainty, and what can be told apart.
+    pub estimate: Estimate,
+    /// Each reading.
+    pub readings: Vec<LogLine>,
+    /// Every flight point without (`drawn`) and with the factors (`shaped`).
+    pub flight_points: Vec<Compared>,
+}
+
+/// The factors as found.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Estimate {
+    /// The factors.
+    pub factors: Factors,
+    /// What was thought of them before.
+    pub widths: Widths,
+    /// Each with its uncertainty: engine power, drag area, propeller power, consumption.
+    pub found: Vec<FactorFound>,
+    /// Pairs that the readings do not tell apart.
+    pub pairs: Vec<Pair>,
+    /// What is worth saying, in plain words.
+    pub remarks: Vec<String>,
+}
+
+/// One factor.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct FactorFound {
+    /// Its key in the job file.
+    pub name: &'static str,
+    /// The factor.
+    pub value: f64,
+    /// Standard deviation, as a share.
+    pub deviation: f64,
+    /// Standard deviation before anything was read, as a share.
+    pub width: f64,
+    /// Whether the readings tell it: they have narrowed it to less than six tenths of what was thought before.
+    pub told: bool,
+}
+
+/// Two factors of which the readings tell the quotient or the product better than either.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Pair {
+    /// One.
+    pub first: &'static str,
+    /// The other.
+    pub second: &'static str,
+    /// Correlation of their logarithms.
+    pub correlation: f64,
+    /// First over second, or first times second where the correlation is below zero.
+    pub value: f64,
+    /// Its standard deviation, as a share.
+    pub deviation: f64,
+}
+
+/// One reading beside what is expected.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct LogLine {
+    /// Engine rpm as read.
+    pub engine_rpm: f64,
+    /// Engine rpm expected without the factors.
+    pub before_rpm: Option<f64>,
+    /// Engine rpm expected with the factors.
+    pub after_rpm: Option<f64>,
+    /// Fuel flow (kg/h) or current (A) as read.
+    pub consumption: Option<f64>,
+    /// The same expected at the rpm as read, without the factors.
+    pub before_consumption: Option<f64>,
+    /// The same with the factors.
+    pub after_consumption: Option<f64>,
+    /// How far off it is with the factors, in standard deviations of its own errors; `None` where it tells nothing.
+    pub off: Option<f64>,
+    /// Whether it is so far off that it was left out.
+    pub outlier: bool,
+    /// What is worth saying of it: why it tells nothing, or what may have happened.
+    pub remark: String,
+}
+
+/// How a propeller can be changed.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
+#[serde(rename_all = "kebab-case")]
+pub enum Means {
+    /// The whole blade is turned.
+    Pitch,
+    /// The outer half is turned, from nothing at half the radius to the whole at the tip.
+    Twist,
+    /// The tips are trimmed or, where there is no wood yet, drawn longer.
+    Diameter,
+}
+
+/// One way to what is wanted.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct Change {
+    /// The way.
+    pub means: Means,
+    /// How much: degrees, or metres of diameter; the most that can be had where it is not reached.
+    pub amount: f64,
+    /// Whether what is wanted is reached.
+    pub reached: bool,
+    /// What is had.
+    pub had: Option<f64>,
+    /// Whether the flight point has an answer.
+    pub state: State,
+    /// Whether it is done by taking wood off the carved blade.
+    pub by_removal: bool,
+    /// Diameter after the change, m.
+    pub diameter_m: f64,
+    /// Geometric pitch at 0.75 R after the change, m.
+    pub pitch_m: f64,
+    /// Every flight point before (`drawn`) and after (`shaped`).
+    pub flight_points: Vec<Compared>,
+}
