@@ -7,6 +7,7 @@
 
 pub mod air;
 pub mod aircraft;
+pub mod bench;
 pub mod blade;
 pub mod carved;
 pub mod change;

@@ -12,12 +12,14 @@ use crate::section::{check_polars, library};
 use carved::check_carved;
 use engine::{check_electric, check_piston};
 use logbook::check_logbook;
+use making::check_making;
 use wishes::check_wishes;
 use wood::check_wood;
 
 mod carved;
 mod engine;
 mod logbook;
+mod making;
 mod wishes;
 mod wood;
 
@@ -58,6 +60,9 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
     }
     if let Some(wishes) = &job.wishes {
         check_wishes(&mut found, wishes, &job.flight_points);
+    }
+    if let Some(making) = &job.bench {
+        check_making(&mut found, making, &job.propeller);
     }
     found.0
 }

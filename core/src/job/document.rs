@@ -8,6 +8,7 @@ mod carved;
 mod engine;
 mod flight_point;
 mod logbook;
+mod making;
 mod propeller;
 mod wishes;
 mod wood;
@@ -19,6 +20,7 @@ pub use engine::{
 };
 pub use flight_point::{FlightPoint, Setting};
 pub use logbook::{Factors, LogReading, Logbook, Widths};
+pub use making::{Flange, LinePoint, Making};
 pub use propeller::{AngleReference, PitchControl, Propeller, Rotation, Station};
 pub use wishes::{Aim, Figure, Held, Limits, RpmLimit, Wishes};
 pub use wood::{Hub, OwnMaterial, Species, StressLimits, USUAL_SPECIES, Wood};
@@ -59,6 +61,9 @@ pub struct Job {
     /// What was read in ground runs and flights.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub logbook: Option<Logbook>,
+    /// How the blade is made.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub bench: Option<Making>,
     /// What a search for the best blade is asked for.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub wishes: Option<Wishes>,

@@ -14,10 +14,10 @@ pub use check::section_name_known;
 pub use demo::{DEMOS, Demo};
 pub use document::{
     Aeroplane, Aim, Aircraft, AltitudeLaw, AngleReference, Battery, BladeReading, Carved, CarvedBlade, Drag,
-    Electric, Engine, Factors, Figure, FlightPoint, Held, HeldTo, HeldToKind, Hub, Interpolation, Job,
-    Limits, LoadPoint, LogReading, Logbook, Method, Multirotor, OwnMaterial, Piston, PitchControl,
-    PowerPoint, Propeller, Rotation, RpmLimit, Section, Setting, Species, Station, StressLimits,
-    USUAL_SPECIES, Widths, Wishes, Wood,
+    Electric, Engine, Factors, Figure, Flange, FlightPoint, Held, HeldTo, HeldToKind, Hub, Interpolation,
+    Job, Limits, LinePoint, LoadPoint, LogReading, Logbook, Making, Method, Multirotor, OwnMaterial, Piston,
+    PitchControl, PowerPoint, Propeller, Rotation, RpmLimit, Section, Setting, Species, Station,
+    StressLimits, USUAL_SPECIES, Widths, Wishes, Wood,
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 

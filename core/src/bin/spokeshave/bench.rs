@@ -1,5 +1,7 @@
 //! `spokeshave bench`: from the blade to the bench.
 
+mod files;
+mod sheets;
 mod strength;
 
 use clap::Subcommand;
@@ -19,11 +21,17 @@ pub(crate) struct Args {
 enum What {
     /// Stress and margin by station, deflection, vibration, weight and balance, hub
     Strength(strength::Args),
+    /// Templates, blank, bench heights, hub and job card on paper, full size: SVG sheets and one PDF
+    Sheets(sheets::Args),
+    /// The blade for machines: STL, CSV of the surface, DXF drawings
+    Files(files::Args),
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
     let rig = args.source.rig()?;
     match &args.what {
         What::Strength(what) => strength::run(&rig, what),
+        What::Sheets(what) => sheets::run(&rig, what),
+        What::Files(what) => files::run(&rig, what),
     }
 }

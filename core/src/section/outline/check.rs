@@ -113,7 +113,7 @@ pub(crate) fn signed_area(points: &[[f64; 2]]) -> f64 {
 }
 
 /// Looks for two pieces that cross, sorted along the chord so that a long list takes no long time.
-fn crossings(points: &[[f64; 2]], places: &[Place]) -> Result<(), OutlineError> {
+pub(crate) fn crossings(points: &[[f64; 2]], places: &[Place]) -> Result<(), OutlineError> {
     let (head, tail) = (points[0], points[points.len() - 1]);
     // Ends that meet to rounding are one point.
     let shut = (head[0] - tail[0]).hypot(head[1] - tail[1]) < 1e-9;

@@ -18,21 +18,20 @@ pub(crate) fn with_edge_thickness(outline: &Outline, thickness: f64) -> Result<O
             most: MAX_EDGE,
         });
     }
-    let added = thickness - least;
-    let from = outline.measures().thickness_at;
-    // The face stays flat: all goes on the back. Without a face each side takes half.
-    let shares = if outline.face().is_some() { [1.0, 0.0] } else { [0.5, -0.5] };
     let nose = sides(outline.points()).0.len() - 1;
-    let points: Vec<[f64; 2]> = outline
-        .points()
-        .iter()
-        .enumerate()
-        .map(|(k, p)| {
-            let part = ((p[0] - from) / (1.0 - from)).max(0.0);
-            [p[0], p[1] + shares[usize::from(k > nose)] * added * part * part]
-        })
-        .collect();
+    let mut points = outline.points().to_vec();
+    thicken(&mut points, nose, outline.measures().thickness_at, thickness - least, outline.face().is_some());
     let mut thick = Outline::from_points(outline.name(), &points)?;
     thick.rotation_rad += outline.rotation_rad();
     Ok(thick)
+}
+
+/// Adds to the edge of points that run from the upper edge round `nose` to the lower edge, with the square of the distance
+/// behind `from`. A face stays flat: all goes on the back; without one each side takes half.
+pub(crate) fn thicken(points: &mut [[f64; 2]], nose: usize, from: f64, added: f64, has_face: bool) {
+    let shares = if has_face { [1.0, 0.0] } else { [0.5, -0.5] };
+    for (k, p) in points.iter_mut().enumerate() {
+        let part = ((p[0] - from) / (1.0 - from)).max(0.0);
+        p[1] += shares[usize::from(k > nose)] * added * part * part;
+    }
 }

@@ -17,11 +17,14 @@ mod families;
 mod measure;
 mod ordinates;
 mod read;
+mod sample;
 mod scale;
 mod spline;
 
+pub(crate) use check::crossings;
 pub use check::{MAX_POINTS, MIN_POINTS};
 pub use edge::MAX_EDGE;
+pub(crate) use edge::thicken;
 pub use error::{OutlineError, Place};
 pub use face::Face;
 pub use families::{arc_back, clark_y, naca_16_series, naca_four_digit, raf_6};
@@ -155,6 +158,13 @@ impl Outline {
     /// [`OutlineError::Figure`] for less than the outline has or more than 5 % of the chord.
     pub fn with_edge_thickness(&self, thickness: f64) -> Result<Self, OutlineError> {
         edge::with_edge_thickness(self, thickness)
+    }
+
+    /// Points of the outline, in chords, at shares of the arc that are the same for every section: `per_side` from the
+    /// upper trailing edge to the nose and as many from the nose, counted in both, to the lower trailing edge.
+    #[must_use]
+    pub fn sampled(&self, per_side: usize) -> Vec<[f64; 2]> {
+        sample::sampled(self, per_side)
     }
 
     pub(crate) fn curve(&self) -> &Curve {

@@ -1,0 +1,39 @@
+//! From the drawing to wood: where every section stands, the solid, the blank, the sheets of paper and the files.
+//!
+//! Frame: the first blade along `x`, the direction in which it turns along `y` (a propeller that turns clockwise seen
+//! from behind; against it for the other), the direction of flight along `z`. The back of the blank is its aft face, down
+//! on the bench while "the blank lies on its back". Lengths are metres in the geometry and millimetres on paper.
+//!
+//! Sections lie in planes square to the blade, each with its centroid (or a point of its chord line) on the stacking
+//! line. Nothing here judges strength.
+
+mod blank;
+mod draw;
+mod error;
+mod file;
+mod form;
+mod loft;
+mod page;
+mod ring;
+mod shape;
+mod sheet;
+mod solid;
+mod turned;
+mod unit;
+mod work;
+mod write;
+
+pub use blank::{Blank, Heights, Layers, Plank};
+pub use draw::{Anchor, Drawing, Item, Layer, Stroke, Text};
+pub use error::{BenchError, Fault};
+pub use file::{File, files, sheet_files};
+pub use form::{Form, SIDE_POINTS};
+pub use loft::{Boss, loft, root_radius_m};
+pub use page::{CAUTIONS, Leaf, Paper, Sheet, View, lay};
+pub use ring::Ring;
+pub use sheet::{Card, Side, leaves, machine_drawings, stack_drawing, template_card};
+pub use solid::Solid;
+pub use turned::{Face, turned};
+pub use unit::Unit;
+pub use work::{Bench, Carved};
+pub use write::{dxf, pdf, picture, stl, surface_csv, svg};

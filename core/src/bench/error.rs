@@ -1,0 +1,104 @@
+//! Why a blade cannot be drawn for the bench: where, and by how much.
+
+use thiserror::Error;
+
+/// One thing that cannot be made.
+#[derive(Clone, Debug, Error, PartialEq)]
+#[non_exhaustive]
+pub enum Fault {
+    /// A section has no outline, or not at that thickness.
+    #[error(
+        "station {station}, r {radius_mm:.1} mm: section \"{section}\" has no outline that can be drawn {percent:.1} % \
+         thick; 1 to 60 % can be drawn, of a section whose outline is known"
+    )]
+    NoOutline {
+        /// Number of the station, from 1.
+        station: usize,
+        /// Its radius, mm.
+        radius_mm: f64,
+        /// Its section.
+        section: String,
+        /// Its thickness, percent of the chord.
+        percent: f64,
+    },
+    /// A station lies inside the hub.
+    #[error(
+        "station {station}, r {radius_mm:.1} mm: {by_mm:.1} mm inside the hub, whose radius is {hub_mm:.1} mm; leave it \
+         out or make propeller.hub_diameter_m smaller"
+    )]
+    InsideHub {
+        /// Number of the station, from 1.
+        station: usize,
+        /// Its radius, mm.
+        radius_mm: f64,
+        /// Radius of the hub, mm.
+        hub_mm: f64,
+        /// How far inside, mm.
+        by_mm: f64,
+    },
+    /// The blade is thicker than the blank.
+    #[error(
+        "r {radius_mm:.1} mm: the blade needs {needed_mm:.1} mm of the blank's thickness, {by_mm:.1} mm more than the \
+         {given_mm:.1} mm it has"
+    )]
+    ThickerThanBlank {
+        /// Radius of the section that reaches farthest, mm.
+        radius_mm: f64,
+        /// Thickness needed along the axis, mm.
+        needed_mm: f64,
+        /// Thickness given, mm.
+        given_mm: f64,
+        /// How much is missing, mm.
+        by_mm: f64,
+    },
+    /// The blade or its hub is wider than the blank.
+    #[error(
+        "r {radius_mm:.1} mm: the blank must be {needed_mm:.1} mm wide, {by_mm:.1} mm more than the {given_mm:.1} mm it has"
+    )]
+    WiderThanBlank {
+        /// Radius of the section that reaches farthest, mm; 0 for the hub.
+        radius_mm: f64,
+        /// Width needed, mm.
+        needed_mm: f64,
+        /// Width given, mm.
+        given_mm: f64,
+        /// How much is missing, mm.
+        by_mm: f64,
+    },
+    /// A section at the hub reaches past its boss.
+    #[error(
+        "r {radius_mm:.1} mm: the section is {needed_mm:.1} mm high along the axis where it enters the hub, and passes \
+         the boss of {given_mm:.1} mm by {by_mm:.1} mm"
+    )]
+    CrossesHub {
+        /// Radius where it does, mm.
+        radius_mm: f64,
+        /// Height of the section, mm.
+        needed_mm: f64,
+        /// Thickness of the boss, mm.
+        given_mm: f64,
+        /// How far it passes, mm.
+        by_mm: f64,
+    },
+    /// Two blades run into one another.
+    #[error("r {radius_mm:.1} mm: neighbouring blades overlap by {by_mm:.1} mm")]
+    BladesOverlap {
+        /// Radius where they overlap most, mm.
+        radius_mm: f64,
+        /// By how much, mm.
+        by_mm: f64,
+    },
+    /// The surface crosses itself.
+    #[error("r {radius_mm:.1} mm: the surface crosses itself, over {by_mm:.2} mm")]
+    CrossesItself {
+        /// Radius of the section that crosses itself, mm.
+        radius_mm: f64,
+        /// Distance between the two places of the outline that cross, along the outline, mm.
+        by_mm: f64,
+    },
+}
+
+/// Everything that keeps a blade from being drawn.
+#[derive(Clone, Debug, Error, PartialEq)]
+#[error("{}", .0.iter().map(ToString::to_string).collect::<Vec<_>>().join("\n"))]
+pub struct BenchError(pub Vec<Fault>);

@@ -1,0 +1,253 @@
+//! Sheets of paper: their size, what stands on every one of them, and large drawings laid over several.
+
+use super::draw::{Anchor, Drawing, Layer, breadth_mm};
+
+/// A size of paper, upright.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
+pub enum Paper {
+    /// 210 mm by 297 mm.
+    #[default]
+    A4,
+    /// 8 1/2 in by 11 in.
+    Letter,
+}
+
+/// Margin that printers keep free, mm.
+const MARGIN_MM: f64 = 10.0;
+/// Room for the heading and for ruler and cautions, mm.
+const HEAD_MM: f64 = 9.0;
+const FOOT_MM: f64 = 21.0;
+/// By how much neighbouring sheets show the same, mm.
+const OVERLAP_MM: f64 = 12.0;
+/// Between parts side by side, mm.
+const GAP_MM: f64 = 6.0;
+
+/// What stands on every sheet.
+pub const CAUTIONS: [&str; 3] = [
+    "Before you act: a propeller can kill. All figures are estimates that need margin and test. Wood varies: inspect it, proof-load",
+    "and balance the blade. Nobody stands in the plane of the disc. Re-check hub-bolt torque as wood moves. Limits and approval belong",
+    "to the aviation authority, the engine maker and a licensed inspector or engineer, whose rules come first.",
+];
+
+impl Paper {
+    /// Width and height, mm.
+    #[must_use]
+    pub fn size_mm(self) -> [f64; 2] {
+        match self {
+            Self::A4 => [210.0, 297.0],
+            Self::Letter => [215.9, 279.4],
+        }
+    }
+
+    /// Its usual name.
+    #[must_use]
+    pub fn name(self) -> &'static str {
+        match self {
+            Self::A4 => "A4",
+            Self::Letter => "Letter",
+        }
+    }
+
+    /// Room for a drawing, mm.
+    #[must_use]
+    pub fn room_mm(self) -> [f64; 2] {
+        let [w, h] = self.size_mm();
+        [w - 2.0 * MARGIN_MM, h - 2.0 * MARGIN_MM - HEAD_MM - FOOT_MM]
+    }
+
+    /// Lower left corner of that room, mm.
+    #[must_use]
+    pub fn room_at_mm(self) -> [f64; 2] {
+        [MARGIN_MM, MARGIN_MM + FOOT_MM]
+    }
+}
+
+/// A drawing seen through a window.
+#[derive(Clone, Debug, PartialEq)]
+pub struct View {
+    /// The drawing, in the sheet's millimetres from its lower left corner; only what lies within the window shows.
+    pub drawing: Drawing,
+    /// The window: lower left and upper right corner, mm.
+    pub window_mm: [[f64; 2]; 2],
+}
+
+/// One sheet of paper.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Sheet {
+    /// What it is, such as `Blank from ahead, part 2 of 4`.
+    pub name: String,
+    /// Its size, mm.
+    pub size_mm: [f64; 2],
+    /// Heading, cautions, ruler and joining marks, in millimetres from the lower left corner.
+    pub frame: Drawing,
+    /// The drawings it carries.
+    pub views: Vec<View>,
+}
+
+/// A drawing with its name, before it is laid on paper.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Leaf {
+    /// What it is.
+    pub name: String,
+    /// The drawing; its lower left corner may lie anywhere.
+    pub drawing: Drawing,
+}
+
+/// Lays leaves on paper, one after the other, each over as many sheets as it needs; every sheet says `title`, its name and its
+/// number.
+#[must_use]
+pub fn lay(title: &str, leaves: &[Leaf], paper: Paper) -> Vec<Sheet> {
+    let mut sheets: Vec<Sheet> = leaves.iter().flat_map(|leaf| laid(leaf, paper)).collect();
+    let of = sheets.len();
+    for (i, sheet) in sheets.iter_mut().enumerate() {
+        furniture(sheet, title, &format!("sheet {} of {of}, {}", i + 1, paper.name()));
+    }
+    sheets
+}
+
+/// How a leaf is cut into parts that fit the room: their size, how many across and down.
+struct Cut {
+    low: [f64; 2],
+    high: [f64; 2],
+    part: [f64; 2],
+    count: [u32; 2],
+}
+
+fn cut(leaf: &Leaf, room: [f64; 2]) -> Option<Cut> {
+    let [low, high] = leaf.drawing.bounds()?;
+    let size = [high[0] - low[0], high[1] - low[1]];
+    let count = [0, 1].map(|a| {
+        let past = size[a] - room[a];
+        1 + (past / (room[a] - OVERLAP_MM) - 1e-9).ceil().max(0.0) as u32
+    });
+    Some(Cut { low, high, part: [0, 1].map(|a| size[a].min(room[a])), count })
+}
+
+/// Sheets that show a leaf, in rows from the top; narrow parts of a long one stand side by side.
+fn laid(leaf: &Leaf, paper: Paper) -> Vec<Sheet> {
+    let (room, at) = (paper.room_mm(), paper.room_at_mm());
+    let Some(cut) = cut(leaf, room) else { return Vec::new() };
+    let [columns, rows] = cut.count;
+    let parts: Vec<[u32; 2]> =
+        (0..rows).flat_map(|row| (0..columns).map(move |column| [column, row])).collect();
+    let abreast =
+        if columns == 1 { ((room[0] + GAP_MM) / (cut.part[0] + GAP_MM)).max(1.0) as usize } else { 1 };
+    let chunks: Vec<&[[u32; 2]]> = parts.chunks(abreast).collect();
+    chunks.iter().map(|chunk| sheet(leaf, &cut, chunk, paper.size_mm(), room, at)).collect()
+}
+
+fn sheet(
+    leaf: &Leaf,
+    cut: &Cut,
+    parts: &[[u32; 2]],
+    size_mm: [f64; 2],
+    room: [f64; 2],
+    at: [f64; 2],
+) -> Sheet {
+    let mut frame = Drawing::default();
+    let wide = parts.len() as f64 * (cut.part[0] + GAP_MM) - GAP_MM;
+    let mut x = at[0] + 0.5 * (room[0] - wide);
+    let mut views = Vec::new();
+    for &[column, row] in parts {
+        let step = [0, 1].map(|a| cut.part[a] - OVERLAP_MM);
+        let by = [
+            x - cut.low[0] - f64::from(column) * step[0],
+            at[1] + room[1] - cut.high[1] + f64::from(row) * step[1],
+        ];
+        let window_mm = [[x, at[1] + room[1] - cut.part[1]], [x + cut.part[0], at[1] + room[1]]];
+        joins(&mut frame, window_mm, [column, row], cut.count);
+        let mut drawing = Drawing::default();
+        drawing.add(&leaf.drawing, by);
+        views.push(View { drawing, window_mm });
+        x += cut.part[0] + GAP_MM;
+    }
+    let [columns, rows] = cut.count;
+    let [column, row] = [parts[0][0] + 1, parts[0][1] + 1];
+    let name = match (columns, rows, parts.len() as u32) {
+        (1, 1, _) => leaf.name.clone(),
+        (1, _, 1) => format!("{}, part {row} of {rows} from the top", leaf.name),
+        (1, _, n) => format!("{}, parts {row} to {} of {rows} from the top", leaf.name, row + n - 1),
+        _ => format!("{}, row {row} of {rows}, column {column} of {columns}", leaf.name),
+    };
+    Sheet { name, size_mm, frame, views }
+}
+
+/// Joining lines in the middle of what two sheets share, with crosses: cut one sheet on the line, lay it on the other's.
+fn joins(frame: &mut Drawing, window: [[f64; 2]; 2], place: [u32; 2], count: [u32; 2]) {
+    let half = 0.5 * OVERLAP_MM;
+    let [low, high] = window;
+    let mut across = |axis: usize, v: f64| {
+        let point = |t: f64| if axis == 0 { [v, t] } else { [t, v] };
+        let (from, to) = (low[1 - axis], high[1 - axis]);
+        frame.line(Layer::Join, [point(from), point(to)]);
+        for share in [0.1, 0.5, 0.9] {
+            frame.cross(Layer::Ruler, point(from + share * (to - from)), 2.5);
+        }
+    };
+    if place[0] > 0 {
+        across(0, low[0] + half);
+    }
+    if place[0] + 1 < count[0] {
+        across(0, high[0] - half);
+    }
+    if place[1] > 0 {
+        across(1, high[1] - half);
+    }
+    if place[1] + 1 < count[1] {
+        across(1, low[1] + half);
+    }
+}
+
+fn furniture(sheet: &mut Sheet, title: &str, number: &str) {
+    let [w, h] = sheet.size_mm;
+    let (left, right, top) = (MARGIN_MM, w - MARGIN_MM, h - MARGIN_MM);
+    let frame = &mut sheet.frame;
+    frame.text([right, top - 3.5], 3.0, Anchor::End, number);
+    let room = right - left - breadth_mm(number, 3.0) - 6.0;
+    frame.bold([left, top - 3.5], 3.6, Anchor::Start, fitted(&format!("{}  ", sheet.name), 3.6 * 1.08, room));
+    let named = breadth_mm(&sheet.name, 3.6) * 1.08 + 4.0;
+    if room - named > 20.0 {
+        frame.text([left + named, top - 3.5], 3.0, Anchor::Start, fitted(title, 3.0, room - named));
+    }
+    frame.line(Layer::Thin, [[left, top - 6.0], [right, top - 6.0]]);
+    ruler(frame, [left, MARGIN_MM + 11.0]);
+    let size = 2.8_f64.min((right - left) / CAUTIONS.iter().map(|c| breadth_mm(c, 1.0)).fold(1.0, f64::max));
+    for (i, line) in CAUTIONS.iter().enumerate() {
+        frame.text([left, MARGIN_MM + 7.0 - 3.3 * i as f64], size, Anchor::Start, *line);
+    }
+}
+
+/// The check ruler: 100 mm and 4 in, one over the other.
+fn ruler(frame: &mut Drawing, [x, y]: [f64; 2]) {
+    frame.line(Layer::Ruler, [[x, y], [x + 100.0, y]]);
+    for mm in 0..=20 {
+        let long = if mm % 10 == 0 {
+            4.0
+        } else if mm % 2 == 0 {
+            2.6
+        } else {
+            1.4
+        };
+        let at = x + 5.0 * f64::from(mm);
+        frame.line(Layer::Ruler, [[at, y], [at, y + long]]);
+    }
+    frame.text(
+        [x + 104.0, y + 0.6],
+        2.6,
+        Anchor::Start,
+        "This bar is 100 mm (3.937 in). Measure it before you cut.",
+    );
+    frame.text([x + 104.0, y + 4.0], 2.6, Anchor::Start, "Print at 100 %, never fitted to the page.");
+}
+
+/// A text cut to a room.
+pub(super) fn fitted(words: &str, size_mm: f64, room_mm: f64) -> String {
+    if breadth_mm(words, size_mm) <= room_mm {
+        return words.to_string();
+    }
+    let mut cut: String = words.to_string();
+    while !cut.is_empty() && breadth_mm(&cut, size_mm) + size_mm > room_mm {
+        cut.pop();
+    }
+    format!("{}…", cut.trim_end())
+}

@@ -1,0 +1,93 @@
+//! One section as it stands in the propeller: a closed ring of points in a plane square to the blade.
+
+use crate::section::outline::Place;
+use crate::section::outline::crossings;
+
+/// A section in its plane. Points run from the middle of the trailing edge over the cambered side round the leading edge
+/// and back along the face: point 0 the trailing edge, the middle one the leading edge.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Ring {
+    /// Radius of the plane, m.
+    pub radius_m: f64,
+    /// Points `[y, z]`, m: along the direction of turning, and along the direction of flight.
+    pub points: Vec<[f64; 2]>,
+}
+
+impl Ring {
+    /// Leading edge, m.
+    #[must_use]
+    pub fn leading_edge(&self) -> [f64; 2] {
+        self.points[self.points.len() / 2]
+    }
+
+    /// Middle of the trailing edge, m.
+    #[must_use]
+    pub fn trailing_edge(&self) -> [f64; 2] {
+        self.points[0]
+    }
+
+    /// The cambered side from the middle of the trailing edge to the leading edge.
+    #[must_use]
+    pub fn upper(&self) -> &[[f64; 2]] {
+        &self.points[..=self.points.len() / 2]
+    }
+
+    /// The face from the leading edge to the middle of the trailing edge.
+    #[must_use]
+    pub fn lower(&self) -> Vec<[f64; 2]> {
+        let mut side = self.points[self.points.len() / 2..].to_vec();
+        side.push(self.points[0]);
+        side
+    }
+
+    /// Least and greatest of one coordinate, m: 0 along the turning, 1 along the flight.
+    #[must_use]
+    pub fn span(&self, axis: usize) -> [f64; 2] {
+        let values = self.points.iter().map(|p| p[axis]);
+        values.fold([f64::INFINITY, f64::NEG_INFINITY], |[low, high], v| [low.min(v), high.max(v)])
+    }
+
+    /// Area, m².
+    #[must_use]
+    pub fn area_m2(&self) -> f64 {
+        let n = self.points.len();
+        let cross = |k: usize| {
+            let (a, b) = (self.points[k], self.points[(k + 1) % n]);
+            a[0] * b[1] - b[0] * a[1]
+        };
+        0.5 * (0..n).map(cross).sum::<f64>().abs()
+    }
+
+    /// Length of outline, m, between two places where the ring crosses itself; `None` where it does not.
+    pub(super) fn crossing_m(&self) -> Option<f64> {
+        // The ring closed by its own first point, so that the last piece is looked at too.
+        let closed: Vec<[f64; 2]> = self.points.iter().chain(self.points.first()).copied().collect();
+        let places: Vec<Place> = (0..closed.len()).map(|point| Place { point, line: None }).collect();
+        let (first, second) = match crossings(&closed, &places) {
+            Err(crate::section::outline::OutlineError::Crossing { first, second }) => {
+                (first.point, second.point)
+            }
+            _ => return None,
+        };
+        let piece = |k: usize| {
+            let (a, b) = (closed[k], closed[k + 1]);
+            (a[0] - b[0]).hypot(a[1] - b[1])
+        };
+        Some((first..=second).map(piece).sum())
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn a_ring_that_crosses_itself_says_over_what_length() {
+        let bow = vec![[0.0, 0.0], [1.0, 1.0], [1.0, 0.0], [0.0, 1.0]];
+        let ring = |points| Ring { radius_m: 0.3, points };
+        let over = ring(bow).crossing_m().unwrap();
+        assert!((over - (1.0 + 2.0 * 2.0_f64.sqrt())).abs() < 1e-12, "{over}");
+        let square = vec![[0.0, 0.0], [1.0, 0.0], [1.0, 1.0], [0.0, 1.0]];
+        assert_eq!(ring(square).crossing_m(), None);
+    }
+}

@@ -1,0 +1,162 @@
+//! A job made ready for the bench: what every sheet and file is drawn from.
+
+use std::f64::consts::TAU;
+
+use crate::job::{Job, Rotation};
+use crate::rig::Rig;
+
+use super::blank::{Blank, Heights};
+use super::error::{BenchError, Fault};
+use super::form::Form;
+use super::loft::{loft, root_radius_m};
+use super::ring::Ring;
+use super::solid::Solid;
+
+/// How far (m) a section may pass the faces of the boss where it enters it.
+const BOSS_SLACK_M: f64 = 2e-4;
+
+/// A station as it is carved.
+#[derive(Clone, Debug, PartialEq)]
+pub struct Carved {
+    /// Its number, from 1, as in the job.
+    pub number: usize,
+    /// Its section where it stands.
+    pub ring: Ring,
+    /// Chord, m.
+    pub chord_m: f64,
+    /// Greatest thickness, m.
+    pub thickness_m: f64,
+    /// Blade angle to the chord line, rad.
+    pub angle_rad: f64,
+    /// Blade angle on the flat face, rad, where there is one.
+    pub face_rad: Option<f64>,
+    /// Its edges on the bench.
+    pub heights: Heights,
+}
+
+/// A blade ready for the bench.
+#[derive(Clone, Debug)]
+pub struct Bench {
+    /// The job it is made from.
+    pub job: Job,
+    /// The blade as a form.
+    pub form: Form,
+    /// The wood it is cut from.
+    pub blank: Blank,
+    /// Rings of the surface, from the inside out.
+    pub rings: Vec<Ring>,
+    /// Stations between hub and tip.
+    pub stations: Vec<Carved>,
+}
+
+impl Bench {
+    /// Makes a job ready for the bench.
+    ///
+    /// # Errors
+    /// Everything that keeps it from being made: where, and by how much.
+    ///
+    /// ```
+    /// use spokeshave::{bench::Bench, job::{DEMOS, Job}, rig::Rig};
+    /// let rig = Rig::new(&Job::from_json(DEMOS[0].json).unwrap()).unwrap();
+    /// let bench = Bench::new(&rig).unwrap();
+    /// assert_eq!(bench.stations.len(), 11);
+    /// ```
+    pub fn new(rig: &Rig) -> Result<Self, BenchError> {
+        let (job, blade) = (&rig.job, &rig.rotor.blade);
+        let form = Form::new(job, blade)?;
+        let blank = Blank::new(job, &form)?;
+        let rings = loft(&form, blank.boss);
+        let faults = faults(&rings, &blank);
+        if !faults.is_empty() {
+            return Err(BenchError(faults));
+        }
+        let stations = form.station_radii_m().enumerate();
+        let stations = stations
+            .filter(|(_, r)| form.chord_m(*r) > 0.0)
+            .map(|(i, radius_m)| {
+                let (cut, ring) = (blade.cut(radius_m), form.ring(radius_m));
+                let chord_m = form.chord_m(radius_m);
+                Carved {
+                    number: i + 1,
+                    chord_m,
+                    thickness_m: cut.thickness_ratio * chord_m,
+                    angle_rad: cut.angle_rad,
+                    face_rad: blade.face_to_chord_rad(radius_m).map(|f| cut.angle_rad - f),
+                    heights: blank.heights(&ring),
+                    ring,
+                }
+            })
+            .collect();
+        Ok(Self { job: job.clone(), form, blank, rings, stations })
+    }
+
+    /// 1 where the leading edge is to the right of a section seen from the tip, −1 where it is to the left.
+    #[must_use]
+    pub fn hand(&self) -> f64 {
+        match self.form.rotation {
+            Rotation::ClockwiseFromBehind => 1.0,
+            Rotation::AnticlockwiseFromBehind => -1.0,
+        }
+    }
+
+    /// A point of a ring on paper, mm: seen from the tip towards the hub, height above the back of the blank upward.
+    #[must_use]
+    pub fn on_paper(&self, p: [f64; 2]) -> [f64; 2] {
+        [1e3 * self.hand() * p[0], 1e3 * (p[1] - self.blank.back_m)]
+    }
+
+    /// The closed surface: the whole propeller where it is of one piece, else one blade.
+    #[must_use]
+    pub fn solid(&self) -> Solid {
+        self.solid_of(&self.rings)
+    }
+
+    pub(super) fn solid_of(&self, rings: &[Ring]) -> Solid {
+        let (tip, right) = (self.form.blade.radius_m, self.hand() > 0.0);
+        match self.blank.boss {
+            Some(boss) => Solid::propeller(rings, tip, self.form.blade.count, boss.radius_m, right),
+            None => Solid::blade(rings, tip, right),
+        }
+    }
+
+    /// Blade angle at 0.75 of the tip radius, rad, and the pitch `2π r tan(angle)` there, m.
+    #[must_use]
+    pub fn nominal(&self) -> (f64, f64) {
+        let r = 0.75 * self.form.blade.radius_m;
+        let angle = self.form.blade.cut(r).angle_rad;
+        (angle, TAU * r * angle.tan())
+    }
+}
+
+fn faults(rings: &[Ring], blank: &Blank) -> Vec<Fault> {
+    let crossing = rings.iter().filter_map(|r| Some((r.radius_m, r.crossing_m()?)));
+    let worst = crossing.max_by(|a, b| a.1.total_cmp(&b.1));
+    let mut faults: Vec<Fault> = worst
+        .map(|(r, by)| Fault::CrossesItself { radius_mm: 1e3 * r, by_mm: 1e3 * by })
+        .into_iter()
+        .collect();
+    if let Some(boss) = blank.boss {
+        let [back, front] = boss.faces_m;
+        let past = |ring: &Ring| {
+            let [low, high] = ring.span(1);
+            (back - low).max(high - front)
+        };
+        let inside = rings.iter().filter(|r| r.radius_m <= boss.radius_m);
+        let worst = inside.max_by(|a, b| past(a).total_cmp(&past(b)));
+        if let Some(ring) = worst.filter(|r| past(r) > BOSS_SLACK_M) {
+            let [low, high] = ring.span(1);
+            faults.push(Fault::CrossesHub {
+                radius_mm: 1e3 * ring.radius_m,
+                needed_mm: 1e3 * (high - low),
+                given_mm: 1e3 * (front - back),
+                by_mm: 1e3 * past(ring),
+            });
+        }
+    }
+    faults
+}
+
+/// Radius from which the blade is as drawn, m.
+pub(super) fn root_m(bench: &Bench) -> f64 {
+    root_radius_m(&bench.form)
+}

@@ -1,0 +1,53 @@
+//! `spokeshave bench JOB sheets`: paper for the bench, full size.
+
+use clap::ValueEnum;
+use spokeshave::bench::{CAUTIONS, Paper, Unit, sheet_files};
+use spokeshave::rig::Rig;
+
+use super::files::{Folder, made_ready};
+use crate::input::{Outcome, print};
+
+#[derive(clap::Args)]
+pub(crate) struct Args {
+    #[command(flatten)]
+    out: Folder,
+    /// Size of the paper
+    #[arg(long, default_value = "a4")]
+    paper: PaperName,
+}
+
+#[derive(Clone, Copy, ValueEnum)]
+enum PaperName {
+    A4,
+    Letter,
+}
+
+/// Unit of the lengths written on paper; drawings are full size in either.
+#[derive(Clone, Copy, ValueEnum)]
+pub(super) enum UnitName {
+    Mm,
+    Inch,
+}
+
+impl From<UnitName> for Unit {
+    fn from(name: UnitName) -> Self {
+        match name {
+            UnitName::Mm => Self::Millimetre,
+            UnitName::Inch => Self::Inch,
+        }
+    }
+}
+
+pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
+    let paper = match args.paper {
+        PaperName::A4 => Paper::A4,
+        PaperName::Letter => Paper::Letter,
+    };
+    let bench = made_ready(rig)?;
+    args.out.write(&sheet_files(&bench, paper, args.out.unit()))?;
+    print(&format!(
+        "\nPrint at 100 %, never fitted to the page; measure the 100 mm bar on every sheet.\n{}",
+        CAUTIONS.join(" ")
+    ))?;
+    Ok(true)
+}
