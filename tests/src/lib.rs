@@ -4,6 +4,7 @@
 
 pub mod browser;
 pub mod formula;
+pub mod judge;
 pub mod page;
 pub mod reference;
 pub mod tools;

@@ -45,3 +45,12 @@ pub const AXE_VERSION: &str = "4.11.0";
 pub fn axe_script(target: &Path) -> PathBuf {
     target.join("axe").join(AXE_VERSION).join("node_modules/axe-core/axe.min.js")
 }
+
+/// What the judges of the bench's files are installed from.
+pub const JUDGES: &str = include_str!("../judges/requirements.txt");
+
+/// The Python that has the other judges, once they are installed into `target`.
+#[must_use]
+pub fn judges_python(target: &Path) -> PathBuf {
+    target.join("judges/bin/python")
+}

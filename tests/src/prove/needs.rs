@@ -1,8 +1,11 @@
-//! Setting up what the checks need beside Rust: a browser with its driver, and the accessibility rules.
+//! Setting up what the checks need beside Rust: a browser with its driver, the accessibility rules, and the other judges of
+//! the bench's files.
 
 use anyhow::{Context, Result};
 use spokeshave_press::{Workspace, run};
-use spokeshave_tests::tools::{AXE_VERSION, axe_script, chromedriver, chromium, on_path, xdotool, xvfb};
+use spokeshave_tests::tools::{
+    AXE_VERSION, JUDGES, axe_script, chromedriver, chromium, judges_python, on_path, xdotool, xvfb,
+};
 use std::process::Command;
 
 /// Installs what is missing.
@@ -13,7 +16,8 @@ pub(crate) fn set_up(workspace: &Workspace) -> Result<()> {
     println!("== what the checks need");
     rust_components(workspace)?;
     packages()?;
-    accessibility_rules(workspace)
+    accessibility_rules(workspace)?;
+    judges(workspace)
 }
 
 /// The formatter and the linter, which a Rust installed without rustup may lack.
@@ -39,6 +43,7 @@ fn packages() -> Result<()> {
         ("xvfb", xvfb().is_some()),
         ("xdotool", xdotool().is_some()),
         ("npm", on_path(&["npm"]).is_some()),
+        ("python3-venv", python_makes_environments()),
     ];
     let missing: Vec<&str> = wanted.iter().filter(|(_, there)| !there).map(|(name, _)| *name).collect();
     if missing.is_empty() {
@@ -48,7 +53,8 @@ fn packages() -> Result<()> {
     anyhow::ensure!(
         may_install(),
         "missing: {}. On Debian run `{line}` as root. Elsewhere install Chromium or Chrome, the \
-         chromedriver of the same version, Xvfb, xdotool and npm, all on the PATH",
+         chromedriver of the same version, Xvfb, xdotool, npm and Python 3.11 or later with its venv module, all on \
+         the PATH",
         missing.join(", ")
     );
     println!("installing {}", missing.join(", "));
@@ -76,5 +82,43 @@ fn accessibility_rules(workspace: &Workspace) -> Result<()> {
     npm.args(["install", "--silent", "--no-save", "--no-package-lock", "--ignore-scripts", "--prefix"]);
     run(npm.arg(&folder).arg(format!("axe-core@{AXE_VERSION}")))?;
     anyhow::ensure!(script.exists(), "npm did not bring {}", script.display());
+    Ok(())
+}
+
+/// Whether Python is there and can make an environment of its own.
+fn python_makes_environments() -> bool {
+    let asked = Command::new("python3").args(["-c", "import ensurepip, venv"]).output();
+    asked.is_ok_and(|asked| asked.status.success())
+}
+
+/// The other judges, into an environment of their own in the target folder; made anew when their list changes.
+fn judges(workspace: &Workspace) -> Result<()> {
+    let python = judges_python(&workspace.target);
+    let folder = workspace.target.join("judges");
+    let list = folder.join("installed.txt");
+    if std::fs::read_to_string(&list).is_ok_and(|installed| installed == JUDGES) && python.exists() {
+        return Ok(());
+    }
+    println!("installing the judges of the bench's files");
+    run(Command::new("python3").args(["-m", "venv", "--clear"]).arg(&folder))?;
+    let wanted = folder.join("requirements.txt");
+    std::fs::write(&wanted, JUDGES)?;
+    let mut pip = Command::new(&python);
+    pip.args([
+        "-m",
+        "pip",
+        "install",
+        "--quiet",
+        "--no-deps",
+        "--disable-pip-version-check",
+        "--requirement",
+    ]);
+    run(pip.arg(&wanted)).with_context(|| {
+        format!(
+            "the judges could not be installed: run `{} -m pip install --no-deps -r tests/judges/requirements.txt`",
+            python.display()
+        )
+    })?;
+    std::fs::write(list, JUDGES)?;
     Ok(())
 }

@@ -1,0 +1,23 @@
+"""Lengths on paper, for the judges that look at pages."""
+
+POINT = 25.4 / 72
+
+
+def ruler_mm(page):
+    """Length of the horizontal line nearest to 100 mm."""
+    lines = [
+        abs(item[1].x - item[2].x) * POINT
+        for path in page.get_drawings()
+        for item in path["items"]
+        if item[0] == "l" and abs(item[1].y - item[2].y) < 1e-3
+    ]
+    return min(lines, key=lambda mm: abs(mm - 100), default=0.0)
+
+
+def judged(name, page, size):
+    """The page has the size and its ruler is 100 mm long; gives that length."""
+    found = [page.rect.width * POINT, page.rect.height * POINT]
+    assert all(abs(a - b) < 0.4 for a, b in zip(found, size)), (name, found)
+    long = ruler_mm(page)
+    assert abs(long - 100) < 0.1, (name, long)
+    return long

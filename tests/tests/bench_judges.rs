@@ -1,0 +1,90 @@
+//! The bench's files before other judges: trimesh (solids), ezdxf (DXF), `MuPDF` (PDF and SVG), shapely (areas). `cargo prove`
+//! installs them from `PyPI`, pinned by `judges/requirements.txt`.
+
+use std::path::Path;
+
+use serde_json::json;
+use spokeshave::bench::{Bench, Paper, Unit, files, sheet_files};
+use spokeshave::job::{DEMOS, Job, PitchControl, Rotation};
+use spokeshave::rig::Rig;
+use spokeshave_tests::judge::ask;
+
+/// What a judge says is shown, and a fault fails the test.
+fn judge(script: &str, arguments: &[&str]) {
+    print!("{}", ask(script, arguments).unwrap());
+}
+
+fn bench(job: &Job) -> Bench {
+    Bench::new(&Rig::new(job).unwrap()).unwrap()
+}
+
+fn text(path: &Path) -> &str {
+    path.to_str().unwrap()
+}
+
+fn written(folder: &Path, files: Vec<spokeshave::bench::File>) {
+    for file in files {
+        std::fs::write(folder.join(file.name), file.bytes).unwrap();
+    }
+}
+
+#[test]
+fn validate_solid_trimesh() {
+    for demo in &DEMOS {
+        for (rotation, hand) in
+            [(Rotation::ClockwiseFromBehind, "right"), (Rotation::AnticlockwiseFromBehind, "left")]
+        {
+            for one_piece in [true, false] {
+                let mut job = Job::from_json(demo.json).unwrap();
+                job.propeller.rotation = rotation;
+                if !one_piece {
+                    job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: 0.0 };
+                }
+                if one_piece && job.propeller.blades != 2 {
+                    // The boss of more blades is bent into each one's share of the turn: no sum of plane sections.
+                    continue;
+                }
+                let folder = tempfile::tempdir().unwrap();
+                written(folder.path(), files(&bench(&job), Unit::Millimetre).unwrap());
+                judge("solid.py", &[text(folder.path()), &job.propeller.blades.to_string(), hand]);
+            }
+        }
+    }
+}
+
+#[test]
+fn validate_drawings_ezdxf_shapely() {
+    for demo in &DEMOS {
+        for rotation in [Rotation::ClockwiseFromBehind, Rotation::AnticlockwiseFromBehind] {
+            let mut job = Job::from_json(demo.json).unwrap();
+            job.propeller.rotation = rotation;
+            let bench = bench(&job);
+            let folder = tempfile::tempdir().unwrap();
+            written(folder.path(), files(&bench, Unit::Inch).unwrap());
+            let stations: Vec<_> = bench
+                .stations
+                .iter()
+                .map(|s| {
+                    let points: Vec<[f64; 2]> = s.ring.points.iter().map(|p| bench.on_paper(*p)).collect();
+                    json!({"number": s.number, "points_mm": points})
+                })
+                .collect();
+            let list = folder.path().join("stations.json");
+            std::fs::write(&list, serde_json::to_string(&stations).unwrap()).unwrap();
+            judge("drawings.py", &[text(folder.path()), text(&list)]);
+        }
+    }
+}
+
+#[test]
+fn validate_paper_mupdf() {
+    for demo in &DEMOS {
+        let bench = bench(&Job::from_json(demo.json).unwrap());
+        for (paper, unit) in [(Paper::A4, Unit::Millimetre), (Paper::Letter, Unit::Inch)] {
+            let folder = tempfile::tempdir().unwrap();
+            written(folder.path(), sheet_files(&bench, paper, unit));
+            let [w, h] = paper.size_mm().map(|mm| mm.to_string());
+            judge("paper.py", &[text(folder.path()), &w, &h]);
+        }
+    }
+}
