@@ -16,7 +16,7 @@ use yew::prelude::*;
 use crate::effect::remembered::Remembered;
 use crate::effect::{file, keys, theme};
 use crate::later::{Plan, Work};
-use crate::results::{Offered, Results};
+use crate::results::{Offered, Results, Sheet};
 use crate::state::{Action, State};
 use crate::view::page::Page;
 use crate::{keep, view};
@@ -136,6 +136,8 @@ pub struct Later {
     pub ceilings: Option<Ceilings>,
     /// What a variable pitch is worth; follows with the ceilings.
     pub worth: Rc<Vec<PitchWorth>>,
+    /// The strength of the blade; follows last, while the Bench panel is open.
+    pub strength: Option<Rc<Sheet>>,
 }
 
 impl Later {

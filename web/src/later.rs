@@ -46,6 +46,8 @@ pub enum Piece {
     Ceilings,
     /// What a variable pitch is worth.
     Worth,
+    /// The strength of the blade.
+    Strength,
     /// Showing the flight points.
     Show,
     /// Showing the map and the curves as well.
@@ -69,6 +71,9 @@ impl Plan {
             }
             if self.opened.fit {
                 pieces.extend([Piece::Ceilings, Piece::ShowAll, Piece::Worth, Piece::ShowAll]);
+            }
+            if self.opened.bench {
+                pieces.extend([Piece::Strength, Piece::ShowAll]);
             }
         }
         pieces
@@ -128,6 +133,7 @@ impl Bench {
             Piece::Envelope => drop(results.envelope(self.plan.point)),
             Piece::Ceilings => results.work_ceilings(self.plan.point),
             Piece::Worth => results.work_worth(),
+            Piece::Strength => results.work_strength(),
             Piece::Show | Piece::ShowMap | Piece::ShowAll => {
                 let later = self.shown(&mut results, piece);
                 drop(results);
@@ -154,6 +160,8 @@ impl Bench {
         now.envelope = self.plan.opened.fit.then(|| results.envelope(point));
         now.take_off = now.envelope.as_ref().and_then(|_| results.take_off(point));
         (now.ceilings, now.worth) = (results.ceilings(point), results.worth());
+        // An older sheet stays until the new one is there.
+        now.strength = results.strength().or(now.strength);
         now
     }
 }
@@ -176,7 +184,9 @@ mod tests {
     fn a_closed_panel_is_not_worked_out() {
         let closed =
             Plan { count: 1, point: 0, dragging: false, along: Along::default(), opened: Opened::default() };
-        for (part, piece) in [(Part::Engine, Piece::Offer), (Part::Fit, Piece::Envelope)] {
+        for (part, piece) in
+            [(Part::Engine, Piece::Offer), (Part::Fit, Piece::Envelope), (Part::Bench, Piece::Strength)]
+        {
             assert!(!closed.pieces().contains(&piece));
             let open = Plan { opened: Opened::default().with(part, true), ..closed };
             assert!(open.pieces().contains(&piece));

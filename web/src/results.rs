@@ -5,10 +5,13 @@ use std::rc::Rc;
 
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::{self, Along, Offer};
-use spokeshave::job::{FlightPoint, Job};
-use spokeshave::result::{Ceilings, Crossing, Envelope, PitchWorth, PointResult, SectionPoint, TakeOff};
+use spokeshave::job::{FlightPoint, Job, Wood};
+use spokeshave::result::{
+    Ceilings, Crossing, Envelope, PitchWorth, PointResult, SectionPoint, Strength, TakeOff,
+};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
+use spokeshave::wood::{WoodError, strength};
 
 /// Speeds and radii of the departure map.
 const MAP_SPEEDS: u32 = 60;
@@ -21,6 +24,9 @@ const OFFER_STEPS: u32 = 48;
 const ENVELOPE_SPEEDS: u32 = 60;
 /// Results kept for each kind.
 const KEPT: usize = 64;
+
+/// The strength of a blade, or why it is not known.
+pub type Sheet = Result<Strength, WoodError>;
 
 /// Results by what they depend on, the latest last.
 #[derive(Debug)]
@@ -74,6 +80,8 @@ pub struct Results {
     ceilings: Shelf<f64, Option<Ceilings>>,
     /// By all flight points.
     worth: Shelf<Vec<FlightPoint>, Vec<PitchWorth>>,
+    /// By the wood and all flight points.
+    strengths: Shelf<(Option<Wood>, Vec<FlightPoint>), Sheet>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
 }
 
@@ -160,6 +168,21 @@ impl Results {
     #[must_use]
     pub fn worth(&self) -> Rc<Vec<PitchWorth>> {
         self.rig.as_ref().and_then(|rig| self.worth.known(&rig.job.flight_points)).unwrap_or_default()
+    }
+
+    /// Works out the strength of the blade.
+    pub fn work_strength(&mut self) {
+        if let Some(rig) = self.rig.clone() {
+            let key = (rig.job.wood.clone(), rig.job.flight_points.clone());
+            self.strengths.get(&key, || strength(&rig));
+        }
+    }
+
+    /// The strength of the blade, once it has been worked out.
+    #[must_use]
+    pub fn strength(&self) -> Option<Rc<Sheet>> {
+        let job = &self.rig.as_ref()?.job;
+        self.strengths.known(&(job.wood.clone(), job.flight_points.clone()))
     }
 
     /// Works out the ceilings at a flight point's temperature offset.

@@ -11,7 +11,7 @@ use super::wishes::some;
 /// A blade needs an inner and an outer station.
 pub const FEWEST_STATIONS: usize = 2;
 
-use super::machine::{AircraftChoice, EngineChoice};
+use super::machine::{AircraftChoice, EngineChoice, WoodChoice};
 
 /// A change that is picked from a few.
 #[derive(Clone, Debug, PartialEq)]
@@ -56,6 +56,8 @@ pub enum Choice {
     Aims(Vec<Aim>),
     /// Whether a search leaves something as drawn.
     Hold(Held, bool),
+    /// Something of the wood.
+    Wood(WoodChoice),
 }
 
 /// Ways the blades turn in the hub.
@@ -200,6 +202,7 @@ impl Choice {
             Self::Engine(choice) => choice.name(),
             Self::Aims(_) => "what counts in a search".into(),
             Self::Hold(..) => "what a search leaves as drawn".into(),
+            Self::Wood(choice) => choice.name(),
         }
     }
 
@@ -256,6 +259,7 @@ impl Choice {
                 held.retain(|h| h != what);
                 held.extend(on.then_some(*what));
             }
+            Self::Wood(choice) => choice.apply(&mut next),
         }
         next.wishes = next.wishes.and_then(some);
         Ok(next)

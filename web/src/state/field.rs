@@ -3,7 +3,7 @@
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
 
-use super::machine::{AircraftFigure, EngineFigure};
+use super::machine::{AircraftFigure, EngineFigure, WoodFigure};
 use super::measure::{Measure, write_station};
 use super::point_figure::PointFigure;
 use super::wishes::LimitFigure;
@@ -42,6 +42,8 @@ pub enum Field {
     Engine(EngineFigure),
     /// A limit of the finished propeller.
     Limit(LimitFigure),
+    /// A figure of the wood.
+    Wood(WoodFigure),
 }
 
 impl Field {
@@ -69,6 +71,7 @@ impl Field {
             Self::Aircraft(figure) => figure.quantity(),
             Self::Engine(figure) => figure.quantity(),
             Self::Limit(figure) => figure.quantity(),
+            Self::Wood(figure) => figure.quantity(),
         }
     }
 
@@ -94,6 +97,7 @@ impl Field {
             Self::Aircraft(figure) => figure.name().into(),
             Self::Engine(figure) => figure.name(),
             Self::Limit(figure) => figure.name().into(),
+            Self::Wood(figure) => figure.name().into(),
         }
     }
 
@@ -116,6 +120,7 @@ impl Field {
             Self::Aircraft(figure) => figure.path(),
             Self::Engine(figure) => figure.path(),
             Self::Limit(figure) => figure.path(),
+            Self::Wood(figure) => figure.path(),
         }
     }
 
@@ -138,6 +143,7 @@ impl Field {
             (Self::Aircraft(figure), _) => figure.value(job),
             (Self::Engine(figure), _) => figure.value(job),
             (Self::Limit(figure), _) => figure.value(job),
+            (Self::Wood(figure), _) => figure.value(job),
             _ => None,
         }
     }
@@ -196,6 +202,7 @@ impl Field {
             (Self::Aircraft(figure), _) => return figure.write(job, value),
             (Self::Engine(figure), _) => return figure.write(job, value),
             (Self::Limit(figure), _) => figure.write(job, value),
+            (Self::Wood(figure), _) => return figure.write(job, value),
             _ => return false,
         }
         true
@@ -217,6 +224,7 @@ impl Field {
                 figure.clear(job);
                 true
             }
+            Self::Wood(figure) => figure.clear(job),
             _ => false,
         }
     }

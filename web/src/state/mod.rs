@@ -32,7 +32,7 @@ pub use field::Field;
 pub use history::History;
 pub use machine::{
     AircraftChoice, AircraftFigure, AircraftKind, AltitudeKind, DragBy, EngineChoice, EngineFigure,
-    EngineKind, FuelBy,
+    EngineKind, FuelBy, WoodChoice, WoodFigure, species_of, wood_of,
 };
 pub use measure::Measure;
 pub use notice::Notice;
@@ -268,7 +268,11 @@ impl State {
             Choice::RemoveStation(i) if self.station > *i => self.station -= 1,
             Choice::AddPoint(_) => self.point = self.job().flight_points.len() - 1,
             Choice::RemovePoint(i) if self.point > *i => self.point -= 1,
-            Choice::RemoveStation(_) | Choice::RemovePoint(_) | Choice::Aircraft(_) | Choice::Engine(_) => {}
+            Choice::RemoveStation(_)
+            | Choice::RemovePoint(_)
+            | Choice::Aircraft(_)
+            | Choice::Engine(_)
+            | Choice::Wood(_) => {}
             _ => return,
         }
         self.drafts.clear();

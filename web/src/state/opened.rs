@@ -7,6 +7,8 @@ pub enum Part {
     Engine,
     /// The Fit panel.
     Fit,
+    /// The Bench panel.
+    Bench,
 }
 
 /// Which of them are open.
@@ -16,6 +18,8 @@ pub struct Opened {
     pub engine: bool,
     /// The Fit panel.
     pub fit: bool,
+    /// The Bench panel.
+    pub bench: bool,
 }
 
 impl Opened {
@@ -25,6 +29,7 @@ impl Opened {
         match part {
             Part::Engine => Self { engine: open, ..self },
             Part::Fit => Self { fit: open, ..self },
+            Part::Bench => Self { bench: open, ..self },
         }
     }
 }

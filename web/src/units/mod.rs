@@ -31,6 +31,8 @@ pub enum Quantity {
     Torque,
     /// Power, W.
     Power,
+    /// Stress, Pa.
+    Stress,
     /// Angle, degrees.
     Angle,
     /// Difference of temperature, K.
@@ -135,6 +137,8 @@ impl Units {
             Quantity::Grading => "N/m",
             Quantity::Torque => self.torque.symbol(),
             Quantity::Power => self.power.symbol(),
+            Quantity::Stress if self.force == ForceUnit::PoundForce => "psi",
+            Quantity::Stress => "MPa",
             Quantity::Angle => "°",
             Quantity::Temperature => "K",
             Quantity::Rpm => "rpm",
@@ -189,6 +193,7 @@ impl Units {
             Quantity::Speed if self.speed == SpeedUnit::MetrePerSecond => 1,
             Quantity::Power if self.power != PowerUnit::Watt => 1,
             Quantity::Climb if self.height == HeightUnit::Metre => 1,
+            Quantity::Stress if self.force != ForceUnit::PoundForce => 1,
             Quantity::Angle
             | Quantity::Temperature
             | Quantity::Mass

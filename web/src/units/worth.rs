@@ -102,6 +102,10 @@ pub(super) fn worth(units: Units, quantity: Quantity) -> f64 {
         Quantity::Distance if units.speed == SpeedUnit::MetrePerSecond => 1_000.0,
         Quantity::Distance => 3_600.0 * speed_m_s(units.speed),
         Quantity::Share => 0.01,
+        Quantity::Stress if units.force == ForceUnit::PoundForce => {
+            force_n(units.force) / length_m(LengthUnit::Inch).powi(2)
+        }
+        Quantity::Stress => 1e6,
         Quantity::Resistance => 0.001,
         _ => 1.0,
     }

@@ -36,6 +36,16 @@ pub fn shape() -> Html {
     }
 }
 
+/// Before a blade is cut or run by what the bench says.
+pub fn bench() -> Html {
+    html! {
+        <aside class="caution">
+            <b>{ "Before you act" }</b>
+            <ul>{ for spokeshave::wood::CAUTIONS.iter().map(|c| html! { <li>{ *c }</li> }) }</ul>
+        </aside>
+    }
+}
+
 /// At the foot of the page.
 pub fn foot() -> Html {
     html! {

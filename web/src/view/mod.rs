@@ -1,5 +1,6 @@
 //! What is seen. Components take values and give actions; they compute nothing.
 
+pub mod bench;
 pub mod blade;
 pub mod caution;
 pub mod chips;

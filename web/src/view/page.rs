@@ -5,6 +5,7 @@ use std::rc::Rc;
 use spokeshave::job::Aircraft;
 use yew::prelude::*;
 
+use super::bench::{self, BenchPanel};
 use super::blade::{BladeSettings, StationTable, in_a_line};
 use super::coefficients::{self, Coefficients};
 use super::fit::{self, FitPanel};
@@ -126,7 +127,11 @@ fn Panels(props: &PageProps) -> Html {
             <Panel id="sections" number={8} title="Sections" result={sections::in_a_line(state)} open={*open}>
                 <Sections state={state.part(sections::same)} rig={later.rig.clone()} points={later.points.clone()} />
             </Panel>
-            <Panel id="method" number={9} title="How it is computed" result={method_line(props)} open={*open}>
+            <Panel id="bench" number={9} title="Bench" open={*open} onunfold={act.on(|open| Action::Unfold(Part::Bench, open))}
+                result={bench::in_a_line(state, later.strength.as_deref())}>
+                <BenchPanel state={state.part(bench::same_bench)} strength={later.strength.clone()} />
+            </Panel>
+            <Panel id="method" number={10} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>

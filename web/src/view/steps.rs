@@ -4,7 +4,7 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 10] = [
+pub const PARTS: [(&str, &str); 11] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
@@ -14,7 +14,8 @@ pub const PARTS: [(&str, &str); 10] = [
     ("shape", "6 Shape"),
     ("coefficients", "7 Coefficients"),
     ("sections", "8 Sections"),
-    ("method", "9 Method"),
+    ("bench", "9 Bench"),
+    ("method", "10 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.

@@ -1,13 +1,15 @@
-//! The aircraft and the engine of a job: their figures, and what is picked, added and taken out.
+//! The aircraft, the engine and the wood of a job: their figures, and what is picked, added and taken out.
 
 pub mod aircraft;
 pub mod engine;
 pub mod engine_choice;
 mod place;
+pub mod wood;
 
 pub use aircraft::{AircraftChoice, AircraftFigure, AircraftKind, DragBy};
 pub use engine::EngineFigure;
 pub use engine_choice::{AltitudeKind, EngineChoice, EngineKind, FuelBy};
+pub use wood::{WoodChoice, WoodFigure, species_of, wood_of};
 
 use spokeshave::job::{DEMOS, Job};
 

@@ -1,0 +1,110 @@
+//! The Bench panel: will the blade hold, what it weighs, how it twists and vibrates.
+
+mod cases;
+mod charts;
+mod figures;
+mod form;
+mod running;
+mod stations;
+
+use std::rc::Rc;
+
+use spokeshave::result::Strength;
+use yew::prelude::*;
+
+use super::{Seen, caution};
+use crate::number::{fixed, with_unit};
+use crate::results::Sheet;
+use crate::state::State;
+use crate::units::Quantity;
+use cases::{Cases, HubTable, Near};
+use charts::Charts;
+use figures::Figures;
+use form::WoodForm;
+use running::Running;
+use stations::Stations;
+
+/// Properties of [`BenchPanel`].
+#[derive(Properties, PartialEq)]
+pub struct BenchPanelProps {
+    /// The state.
+    pub state: Seen,
+    /// The strength of the blade; may be a frame old, not there before it is worked out.
+    pub strength: Option<Rc<Sheet>>,
+}
+
+/// Whether the panel shows the same of two states.
+#[must_use]
+pub fn same_bench(a: &State, b: &State) -> bool {
+    a.job().wood == b.job().wood && a.drafts == b.drafts && a.units == b.units && a.station == b.station
+}
+
+/// The bench in a line.
+#[must_use]
+pub fn in_a_line(state: &State, sheet: Option<&Sheet>) -> String {
+    let Some(Ok(sheet)) = sheet else { return "stress and margin, weight, twist and vibration".into() };
+    let mass = with_unit(state.units, Quantity::Mass, Some(sheet.mass.blades_kg));
+    let margin = sheet.governing.as_ref().map_or_else(
+        || "no load known".into(),
+        |g| {
+            if g.margin < 0.0 {
+                format!("over the limit by {} %", fixed(100.0 * (g.stress_pa / g.limit_pa - 1.0), 0))
+            } else {
+                format!("{} % in hand", fixed(100.0 * g.margin, 0))
+            }
+        },
+    );
+    format!("{}: {margin}; blades {mass}", sheet.material.name)
+}
+
+/// Boxes beside what follows from them.
+#[component]
+pub fn BenchPanel(props: &BenchPanelProps) -> Html {
+    let state = &props.state;
+    let sheet = match props.strength.as_deref() {
+        None => {
+            html! { <p class="note" aria-busy="true">{ "The strength is worked out while this panel is open." }</p> }
+        }
+        Some(Err(why)) => html! { <p class="note" role="alert">{ why.to_string() }</p> },
+        Some(Ok(sheet)) => told(state, sheet),
+    };
+    html! {
+        <div class="bench">
+            <div class="machine">
+                <WoodForm state={state.clone()} />
+                <div class="machine-readings">{ sheet }</div>
+            </div>
+            { caution::bench() }
+        </div>
+    }
+}
+
+fn told(state: &Seen, sheet: &Strength) -> Html {
+    let units = state.units;
+    html! {
+        <>
+            { decides(sheet) }
+            <Figures sheet={sheet.clone()} {units} />
+            <Charts sheet={sheet.clone()} {units} />
+            <Stations stations={sheet.stations.clone()} {units} selected={state.station} />
+            <Cases cases={sheet.cases.clone()} {units} />
+            <Running running={sheet.running.clone()} {units} />
+            <Near near={sheet.vibration.near.clone()} />
+            if let Some(hub) = &sheet.hub { <HubTable hub={hub.clone()} {units} /> }
+            <details class="taken"><summary>{ "Taken for granted" }</summary>
+                <ul>{ for sheet.assumptions.iter().map(|a| html! { <li>{ a }</li> }) }</ul>
+            </details>
+        </>
+    }
+}
+
+/// What decides, in a sentence, with the reason of the limit.
+fn decides(sheet: &Strength) -> Html {
+    let Some(g) = &sheet.governing else {
+        return html! { <p class="note">{ "No flight point has an answer, so that no load is known." }</p> };
+    };
+    let class = if g.margin < 0.0 { "decides over" } else { "decides" };
+    html! {
+        <p {class} role="status">{ &g.sentence }<small>{ format!("That limit is {}.", g.reason) }</small></p>
+    }
+}
