@@ -5,8 +5,8 @@ mod any_job;
 use any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
-use spokeshave::job::{DEMOS, Hub, Job, OwnMaterial, Species, StressLimits, Wood};
-use spokeshave::result::{CaseKind, ModeKind, Strength};
+use spokeshave::job::{DEMOS, Engine, Hub, Job, OwnMaterial, Species, StressLimits, Wood};
+use spokeshave::result::{CaseKind, ModeKind, NearOrder, Strength};
 use spokeshave::rig::Rig;
 use spokeshave::wood::strength;
 
@@ -150,6 +150,24 @@ fn rotation_turns_the_blade_finer_and_lift_ahead_of_the_centroid_coarser() {
     };
     // Little thrust and the fastest turning, and much thrust.
     assert!(twist("Overspeed") < 0.0 && twist("Standing") > 1.0);
+}
+
+#[test]
+fn a_gear_brings_the_orders_of_the_engine() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(engine)) = &mut job.engine else { panic!("a piston engine") };
+    engine.gear_ratio = 2.0;
+    engine.full_throttle.iter_mut().for_each(|p| p.rpm *= 2.0);
+    engine.max_rpm = engine.max_rpm.map(|rpm| 2.0 * rpm);
+    let geared = sheet(&job).vibration.near;
+    let own = |n: &&NearOrder| !n.of_engine;
+    // Twice a turn of the propeller is once a turn of the engine.
+    let twice = geared.iter().filter(own).filter(|n| n.order == 2).count();
+    assert!(
+        twice > 0 && geared.iter().filter(|n| n.of_engine && n.order == 1).count() == twice,
+        "{geared:?}"
+    );
+    assert!(sheet(&demo(0)).vibration.near.iter().all(|n| own(&n)));
 }
 
 #[test]

@@ -296,6 +296,8 @@ pub struct NearOrder {
     pub hz: f64,
     /// Times a turn.
     pub order: u32,
+    /// Whether it is a turn of the engine, which a gear makes another than the propeller's.
+    pub of_engine: bool,
     /// Frequency over that of the order, less 1.
     pub away: f64,
 }

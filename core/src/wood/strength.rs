@@ -5,6 +5,7 @@ use super::cases::{Case, cases};
 use super::judged::{Loaded, worst};
 use super::remedy::{Nearest, governing, remedy};
 use super::{BladeBeam, Place, WoodError, hub, mass, twist, vibration};
+use crate::engine::Shaft;
 use crate::fit::rpm_of;
 use crate::job::VERSION;
 use crate::result::{CaseFigures, CaseResult, HubResult, MaterialUsed, Strength, StressStation};
@@ -37,7 +38,7 @@ pub fn strength(rig: &Rig) -> Result<Strength, WoodError> {
         material: material_used(rig, &beam, wood.moisture_percent),
         mass: mass(&beam),
         governing: governing(&stations, &beam.material),
-        vibration: vibration::vibration(&beam, &speeds),
+        vibration: vibration::vibration(&beam, &speeds, rig.shaft.as_ref().map_or(1.0, Shaft::gear_ratio)),
         running: (0..rig.job.flight_points.len()).filter_map(|i| twist::running(rig, &beam, i)).collect(),
         hub: wood.hub.as_ref().and_then(|h| hub_result(rig, &beam, h, &answered)),
         assumptions: assumptions(rig, &beam, &case_results),

@@ -13,15 +13,18 @@ const TWIST: usize = 1;
 const SPEEDS: usize = 7;
 /// Highest number of times a turn that is looked at.
 const ORDERS: u32 = 4;
+/// The same of an engine's turn, where a gear stands between.
+const ENGINE_ORDERS: u32 = 2;
 /// Nearness at which an order is named (common practice keeps at least 10 % away).
 const NEAR: f64 = 0.10;
 
-/// Lines from rest to the fastest rotation, and the cases (name and rad/s) in which a mode comes near an order.
-pub(super) fn vibration(beam: &BladeBeam, cases: &[(String, f64)]) -> Vibration {
+/// Lines from rest to the fastest rotation, and the cases (name and rad/s) in which a mode comes near an order; the gear ratio is the engine's turns over
+/// the propeller's.
+pub(super) fn vibration(beam: &BladeBeam, cases: &[(String, f64)], gear_ratio: f64) -> Vibration {
     let fastest = cases.iter().map(|c| c.1).fold(0.0, f64::max);
     let speeds: Vec<f64> = (0..SPEEDS).map(|i| fastest * i as f64 / (SPEEDS - 1) as f64).collect();
     let lines = lines(beam, if fastest > 0.0 { &speeds } else { &speeds[..1] });
-    Vibration { near: near(&lines, cases), lines }
+    Vibration { near: near(&lines, cases, gear_ratio), lines }
 }
 
 fn lines(beam: &BladeBeam, speeds_rad_s: &[f64]) -> Vec<FrequencyLine> {
@@ -51,17 +54,34 @@ fn bending(beam: &BladeBeam, rotation_rad_s: f64) -> Option<Vec<BendingMode>> {
     beam.bending(&stiffness, rotation_rad_s).modes(BENDING)
 }
 
-fn near(lines: &[FrequencyLine], cases: &[(String, f64)]) -> Vec<NearOrder> {
+/// Times a turn that are looked at: of the propeller, and of an engine that turns otherwise.
+fn orders(gear_ratio: f64) -> Vec<(f64, u32, bool)> {
+    let engine = if (gear_ratio - 1.0).abs() > 0.01 { ENGINE_ORDERS } else { 0 };
+    let own = (1..=ORDERS).map(|n| (f64::from(n), n, false));
+    own.chain((1..=engine).map(|n| (gear_ratio * f64::from(n), n, true))).collect()
+}
+
+fn near(lines: &[FrequencyLine], cases: &[(String, f64)], gear_ratio: f64) -> Vec<NearOrder> {
+    let orders = orders(gear_ratio);
     let mut all = Vec::new();
     for (case, rotation_rad_s) in cases {
         let turn_hz = rotation_rad_s / TAU;
         for line in lines {
             let hz = at(line, 60.0 * turn_hz);
-            let order = (hz / turn_hz).round();
-            let away = hz / (order * turn_hz) - 1.0;
-            if (1.0..=f64::from(ORDERS)).contains(&order) && away.abs() < NEAR {
-                let (mode, number, case) = (line.mode, line.number, case.clone());
-                all.push(NearOrder { case, mode, number, hz, order: order as u32, away });
+            for (times, order, of_engine) in &orders {
+                let away = hz / (times * turn_hz) - 1.0;
+                if away.abs() < NEAR {
+                    let (mode, number, case) = (line.mode, line.number, case.clone());
+                    all.push(NearOrder {
+                        case,
+                        mode,
+                        number,
+                        hz,
+                        order: *order,
+                        of_engine: *of_engine,
+                        away,
+                    });
+                }
             }
         }
     }

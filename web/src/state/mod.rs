@@ -16,6 +16,8 @@ pub mod point_figure;
 mod tests;
 #[cfg(test)]
 mod tests_machine;
+#[cfg(test)]
+mod tests_wood;
 pub mod variant;
 pub mod wishes;
 

@@ -130,8 +130,10 @@ impl WoodFigure {
             (Some(place), None) => place.clear(),
             (None, _) => false,
         };
-        if changed {
-            job.wood = Some(Wood { hub: held.1, ..held.0 });
+        let next = Wood { hub: held.1, ..held.0 };
+        // What is usual needs no place in the job.
+        if changed && (job.wood.is_some() || next != Wood::default()) {
+            job.wood = Some(next);
         }
         changed
     }
@@ -175,13 +177,14 @@ impl WoodChoice {
 fn started(job: &Job) -> Hub {
     let p = &job.propeller;
     let plates = p.hub_diameter_m.max(0.05 * p.diameter_m);
+    let tenth_mm = |metres: f64| (1e4 * metres).round() / 1e4;
     Hub {
-        thickness_m: 0.065 * p.diameter_m,
-        flange_diameter_m: plates,
-        bore_m: 0.15 * plates,
+        thickness_m: tenth_mm(0.065 * p.diameter_m),
+        flange_diameter_m: tenth_mm(plates),
+        bore_m: tenth_mm(0.15 * plates),
         bolts: if p.diameter_m < 0.6 { 4 } else { 6 },
-        bolt_circle_m: 0.65 * plates,
-        bolt_diameter_m: 0.05 * plates,
+        bolt_circle_m: tenth_mm(0.65 * plates),
+        bolt_diameter_m: tenth_mm(0.05 * plates).max(0.001),
         bolt_torque_n_m: None,
     }
 }

@@ -87,13 +87,14 @@ pub(super) fn Near(props: &NearProps) -> Html {
     }
     let line = |n: &NearOrder| {
         format!(
-            "{}: mode {} ({}) at {} Hz lies {} % from {} a turn",
+            "{}: mode {} ({}) at {} Hz lies {} % from {} a turn{}",
             n.case,
             n.number,
             n.mode.words(),
             fixed(n.hz, 0),
             signed(100.0 * n.away, 0),
-            n.order
+            n.order,
+            if n.of_engine { " of the engine" } else { "" }
         )
     };
     html! {

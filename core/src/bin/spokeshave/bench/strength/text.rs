@@ -147,7 +147,7 @@ fn vibration(v: &Vibration) -> String {
             n.case.clone(),
             format!("{} {}", n.number, n.mode.words()),
             figure(Some(n.hz), 1),
-            n.order.to_string(),
+            format!("{}{}", n.order, if n.of_engine { " of the engine" } else { "" }),
             signed(Some(100.0 * n.away), 0),
         ]
     });
