@@ -45,7 +45,9 @@ pub fn answer(rig: &Rig, point: &FlightPoint, air: Air, near: &mut Near) -> Resu
     let at = Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
     match point.setting {
         Setting::FullThrottle {} if point.airspeed_m_s.is_none() => {
-            let full = top_speed::fastest_near(rig, &at, near.top_speed_m_s)?;
+            let before = near.top_speed_m_s.map(|v| (v, near.trail.newest()));
+            let (full, trail) = top_speed::fastest_near(rig, &at, before)?;
+            near.trail = trail;
             near.top_speed_m_s = Some(full.condition.airspeed_m_s);
             Ok(full.into())
         }

@@ -44,11 +44,16 @@ pub(super) fn fastest(rig: &Rig, at: &Condition) -> Result<Full, State> {
 }
 
 /// The same from the answer of a propeller a little different, where it leads there.
-pub(super) fn fastest_near(rig: &Rig, at: &Condition, near_m_s: Option<f64>) -> Result<Full, State> {
+pub(super) fn fastest_near(
+    rig: &Rig,
+    at: &Condition,
+    near: Option<(f64, Trail)>,
+) -> Result<(Full, Trail), State> {
     let exact = Chase::new(Solver { rig, rough: false }, at, true)?;
     let rough = Chase::new(Solver { rig, rough: true }, at, true)?;
-    let found = near_m_s.and_then(|v| exact.met(&rough, (1.0 - NEAR) * v, (1.0 + NEAR) * v));
-    found.map_or_else(|| fastest(rig, at), Ok)
+    let found =
+        near.and_then(|(v, trail)| exact.met_from(&rough, (1.0 - NEAR) * v, (1.0 + NEAR) * v, &trail));
+    found.map_or_else(|| fastest(rig, at).map(|full| (full, Trail::default())), Ok)
 }
 
 /// The fastest level flight within the engine's limit rpm, throttled back to it where full throttle would pass it.
@@ -134,7 +139,12 @@ impl<'r> Chase<'r> {
     /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends
     /// first.
     fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Full> {
-        let (trail, rough_trail) = (RefCell::default(), RefCell::default());
+        self.met_from(rough, low, high, &Trail::default()).map(|met| met.0)
+    }
+
+    /// The same with an answer near by to begin from, and the last one on the way.
+    fn met_from(&self, rough: &Self, low: f64, high: f64, from: &Trail) -> Option<(Full, Trail)> {
+        let (trail, rough_trail) = (RefCell::new(from.clone()), RefCell::new(from.clone()));
         let search = Search {
             range: low..=high,
             steps: 1,
@@ -145,6 +155,6 @@ impl<'r> Chase<'r> {
         let top = search.root().ok()?.0.x;
         let full = self.full(top, &mut trail.borrow_mut()).ok()?;
         let spare = self.spare_n(&full)?.abs();
-        (spare < MET_SHARE * full.loads.thrust_n).then_some(full)
+        (spare < MET_SHARE * full.loads.thrust_n).then(|| (full, trail.into_inner().newest()))
     }
 }

@@ -43,11 +43,13 @@ pub fn pitch_diameter(
         }
     }
     let (standing, beam) = (standing(rig, limits), beam(rig, limits));
-    let (mut near, mut near_standing) = (Near::default(), Near::default());
+    // Each diameter goes on from its own answer at the pitch before.
+    let mut near = vec![(Near::default(), Near::default()); diameters_m.len()];
     let mut cell = |(p, d): (usize, usize)| {
         let rig = sized(rig, pitches_m[p], diameters_m[d], by).ok()?;
-        let looked = look(&rig, at, &mut near);
-        let standing = standing.as_ref().map(|point| look(&rig, point, &mut near_standing).brief);
+        let (near, near_standing) = &mut near[d];
+        let looked = look(&rig, at, near);
+        let standing = standing.as_ref().map(|point| look(&rig, point, near_standing).brief);
         let all = margins(&rig, limits, std::slice::from_ref(&looked), standing.as_ref(), beam.as_ref());
         let broken = all.iter().filter(|m| m.share < 0.0).map(|m| m.limit).collect();
         Some(ChartCell { figures: looked.brief, standing_rpm: standing.and_then(|b| b.rpm), broken })

@@ -2,13 +2,14 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::Job;
+use spokeshave::job::{Figure, Job};
 use yew::prelude::*;
 
 use super::figures::{name, told, unit};
 use crate::background::shape::{Cost, DRAG_PERCENT, LIFT_PERCENT, Task};
 use crate::chart::line::{Axis, LineChart, Series, Stroke, Upright};
 use crate::chart::unit::Unit;
+use crate::number::significant;
 use crate::state::State;
 use crate::units::Quantity;
 use crate::view::Seen;
@@ -73,16 +74,21 @@ pub struct CostDrawingsProps {
 /// One figure along the blade, all of them in a table.
 #[component]
 pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
-    let shown = use_state_eq(|| 0usize);
-    let (state, costs) = (&props.state, &props.costs);
-    let Some(cost) = costs.get(*shown).or(costs.first()) else { return html! {} };
+    let picked = use_state_eq(|| None::<usize>);
+    let state = &props.state;
+    let costs: Vec<&Cost> = props.costs.iter().filter(|c| moves(c)).collect();
+    let here = state.job().flight_points.get(state.point).map_or("", |p| p.name.as_str());
+    let usual = costs.iter().position(|c| c.flight_point == here && c.figure == Figure::Efficiency);
+    let shown = picked.or(usual).unwrap_or(0);
+    let Some(cost) = costs.get(shown).or(costs.first()) else { return html! {} };
     let words = |c: &Cost| AttrValue::from(format!("{} at {}", name(c.figure), c.flight_point));
     let onpick = {
-        let shown = shown.setter();
-        Callback::from(move |i: usize| shown.set(i))
+        let picked = picked.setter();
+        Callback::from(move |i: usize| picked.set(Some(i)))
     };
     let rows = costs.iter().map(|c| {
-        let band = |b: f64| told(state.units, c.figure, Some(b));
+        let unit = unit(state.units, c.figure);
+        let band = |b: f64| format!("{}\u{a0}{}", significant(unit.of(b), 2), unit.name);
         html! {
             <tr>
                 <th scope="row">{ words(c) }</th><td>{ told(state.units, c.figure, Some(c.drawn)) }</td>
@@ -92,7 +98,7 @@ pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
     });
     html! {
         <>
-            <Pick label="Shown along the blade" options={costs.iter().map(words).collect::<Vec<_>>()} picked={Some((*shown).min(costs.len() - 1))} {onpick} />
+            <Pick label="Shown along the blade" options={costs.iter().map(|c| words(c)).collect::<Vec<_>>()} picked={Some(shown.min(costs.len() - 1))} {onpick} />
             <p class="note">{ careful_words(state, cost) }</p>
             <div class="trio">{ for (0..3).map(|k| along(state, cost, k)) }</div>
             <div class="scroll" tabindex="0" role="region" aria-label="What errors of carving come to">
@@ -109,6 +115,11 @@ pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
             </div>
         </>
     }
+}
+
+/// Whether errors change a figure at all: in level flight the drag gives the thrust.
+fn moves(cost: &Cost) -> bool {
+    cost.bands[1] > 1e-6 * cost.drawn.abs().max(1e-3)
 }
 
 /// The station at which a degree costs most.

@@ -117,7 +117,7 @@ impl Layers {
 impl Place {
     /// Whether words fit about a pixel.
     fn holds(&self, [x, y]: [f64; 2]) -> bool {
-        (self.left + 30.0..=self.right - 30.0).contains(&x)
+        (self.left + 70.0..=self.right - 70.0).contains(&x)
             && (self.top + 10.0..=self.low - 10.0).contains(&y)
     }
 }
