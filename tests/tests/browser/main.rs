@@ -6,5 +6,6 @@ mod job;
 mod machine;
 mod native_save;
 mod opening;
+mod paper;
 mod rescue;
 mod shape;

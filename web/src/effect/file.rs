@@ -12,12 +12,18 @@ use crate::state::{Action, Notice};
 /// Offers a text as a file. Returns whether the browser took it.
 #[must_use]
 pub fn offer(name: &str, kind: &str, text: &str) -> bool {
-    try_offer(name, kind, text).is_some()
+    try_offer(name, Blob::new_with_options(text, Some(kind))).is_some()
 }
 
-fn try_offer(name: &str, kind: &str, text: &str) -> Option<()> {
+/// Offers bytes as a file. Returns whether the browser took it.
+#[must_use]
+pub fn offer_bytes(name: &str, kind: &str, bytes: &[u8]) -> bool {
+    try_offer(name, Blob::new_with_options(bytes, Some(kind))).is_some()
+}
+
+fn try_offer(name: &str, blob: Blob) -> Option<()> {
     let document = web_sys::window()?.document()?;
-    let url = ObjectUrl::from(Blob::new_with_options(text, Some(kind)));
+    let url = ObjectUrl::from(blob);
     let link: HtmlAnchorElement = document.create_element("a").ok()?.dyn_into().ok()?;
     link.set_href(&url);
     link.set_download(name);

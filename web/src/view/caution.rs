@@ -46,6 +46,11 @@ pub fn bench() -> Html {
     }
 }
 
+/// Before wood is cut by what stands on paper.
+pub fn paper() -> Html {
+    html! { <aside class="caution">{ spokeshave::bench::CAUTIONS.join(" ") }</aside> }
+}
+
 /// At the foot of the page.
 pub fn foot() -> Html {
     html! {

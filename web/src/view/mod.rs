@@ -23,6 +23,7 @@ pub mod shape;
 pub mod steps;
 pub mod units;
 pub mod verdict;
+pub mod workshop;
 
 use std::rc::Rc;
 

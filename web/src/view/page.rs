@@ -23,6 +23,7 @@ use super::sections::{self, Sections};
 use super::shape::{self, ShapePanel};
 use super::steps::Steps;
 use super::verdict::Verdict;
+use super::workshop::Workshop;
 use super::{Seen, caution, use_act};
 use crate::app::{Later, Now};
 use crate::chart::hatch::Hatches;
@@ -131,7 +132,8 @@ fn Panels(props: &PageProps) -> Html {
                 result={bench::in_a_line(state, later.strength.as_deref())}>
                 <BenchPanel state={state.part(bench::same_bench)} strength={later.strength.clone()} />
             </Panel>
-            <Panel id="method" number={10} title="How it is computed" result={method_line(props)} open={*open}>
+            <Workshop number={10} rig={later.rig.clone()} unit={state.units.length} />
+            <Panel id="method" number={11} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>

@@ -4,7 +4,7 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 11] = [
+pub const PARTS: [(&str, &str); 12] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
@@ -15,7 +15,8 @@ pub const PARTS: [(&str, &str); 11] = [
     ("coefficients", "7 Coefficients"),
     ("sections", "8 Sections"),
     ("bench", "9 Bench"),
-    ("method", "10 Method"),
+    ("paper", "10 Paper"),
+    ("method", "11 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.
