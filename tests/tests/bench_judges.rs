@@ -1,5 +1,5 @@
-//! The bench's files before other judges: trimesh (solids), ezdxf (DXF), MuPDF (PDF and SVG), shapely (areas). `cargo prove`
-//! installs them from PyPI, pinned by `judges/requirements.txt`.
+//! The bench's files before other judges: trimesh (solids), ezdxf (DXF), `MuPDF` (PDF and SVG), shapely (areas). `cargo prove`
+//! installs them from `PyPI`, pinned by `judges/requirements.txt`.
 
 use std::path::Path;
 

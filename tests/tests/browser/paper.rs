@@ -5,7 +5,7 @@ use serde_json::json;
 use spokeshave_tests::browser::drive;
 use spokeshave_tests::judge::ask;
 
-/// The sheets as the browser prints them, judged by MuPDF.
+/// The sheets as the browser prints them, judged by `MuPDF`.
 async fn printed(paper: &'static str, size_mm: [&'static str; 2]) -> Result<()> {
     drive("print-sheets", async |browser| {
         browser.open_page().await?;

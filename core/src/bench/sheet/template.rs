@@ -92,14 +92,38 @@ fn drawn(bench: &Bench, station: &Carved, side: Side, unit: Unit) -> Drawing {
     let to_middle = if at < trail_x.max(lead_x) { 1.5 } else { -1.5 };
     let anchor = if to_middle > 0.0 { Anchor::Start } else { Anchor::End };
     let widest = words.iter().map(|w| breadth_mm(w, 1.08)).fold(0.1, f64::max);
-    let size = (0.62 * (trail_x - lead_x).abs() / widest).clamp(1.5, 3.0);
-    let last = words.len() as f64 - 1.0;
-    for (k, line) in words.into_iter().enumerate() {
-        let down = if side == Side::Upper { k as f64 + 1.0 } else { last - k as f64 };
-        let foot = [at + to_middle, y + inward * (MARK_MM + 0.5 + 1.25 * size * down)];
-        drawing.items.push(Item::Text(Text { at: foot, size_mm: size, anchor, bold: k == 0, words: line }));
-    }
+    let largest = (0.62 * (trail_x - lead_x).abs() / widest).clamp(SMALLEST_MM, LARGEST_MM);
+    let block =
+        |size: f64| written(&words, [at + to_middle, y + inward * (MARK_MM + 0.5)], inward, anchor, size);
+    let steps = (0..20).map(|k| largest - 0.1 * f64::from(k)).take_while(|size| *size >= SMALLEST_MM);
+    let size = steps.into_iter().find(|size| clear_of_wood(&block(*size), &card, side));
+    drawing.items.extend(block(size.unwrap_or(SMALLEST_MM)).into_iter().map(Item::Text));
     drawing
+}
+
+/// Sizes of the letters on a card, mm.
+const LARGEST_MM: f64 = 3.0;
+const SMALLEST_MM: f64 = 1.5;
+
+/// Lines of words from a datum edge inward, the first one on top and bold.
+fn written(words: &[String], [x, y]: [f64; 2], inward: f64, anchor: Anchor, size_mm: f64) -> Vec<Text> {
+    let last = words.len() as f64 - 1.0;
+    let line = |(k, words): (usize, &String)| {
+        let down = if inward < 0.0 { k as f64 + 1.0 } else { last - k as f64 };
+        let at = [x, y + inward * 1.25 * size_mm * down];
+        Text { at, size_mm, anchor, bold: k == 0, words: words.clone() }
+    };
+    words.iter().enumerate().map(line).collect()
+}
+
+/// Whether no word comes near the part of a card that lies on the wood.
+fn clear_of_wood(words: &[Text], card: &Card, side: Side) -> bool {
+    let clear = |text: &Text, p: &[f64; 2]| {
+        let (left, [_, foot]) = (text.at[0] + text.left_mm(), text.at);
+        let beside = p[0] < left - 1.0 || p[0] > left + text.breadth_mm() + 1.0;
+        beside || if side == Side::Upper { p[1] < foot - 0.8 } else { p[1] > foot + text.size_mm + 0.3 }
+    };
+    words.iter().all(|text| card.on_wood.iter().all(|p| clear(text, p)))
 }
 
 /// Length of the mark on a datum edge, mm.
