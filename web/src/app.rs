@@ -7,7 +7,7 @@ use gloo_events::EventListener;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::Along;
 use spokeshave::job::Job;
-use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
+use spokeshave::result::{Ceilings, Envelope, Logged, PitchWorth, PointResult, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 use wasm_bindgen::JsCast;
@@ -16,7 +16,7 @@ use yew::prelude::*;
 use crate::effect::remembered::Remembered;
 use crate::effect::{file, keys, theme};
 use crate::later::{Plan, Work};
-use crate::results::{Offered, Results, Sheet};
+use crate::results::{CarvedFound, Offered, Results, Sheet};
 use crate::state::{Action, State};
 use crate::view::page::Page;
 use crate::{keep, view};
@@ -138,6 +138,10 @@ pub struct Later {
     pub worth: Rc<Vec<PitchWorth>>,
     /// The strength of the blade; follows last, while the Bench panel is open.
     pub strength: Option<Rc<Sheet>>,
+    /// The carved blades, or why there is nothing of them; not there while their panel was never open.
+    pub carved: Option<Rc<Result<CarvedFound, String>>>,
+    /// The logbook, or why it tells nothing; not there while its panel was never open.
+    pub logged: Option<Rc<Result<Logged, String>>>,
 }
 
 impl Later {

@@ -6,12 +6,13 @@ use std::rc::Rc;
 
 use gloo_timers::callback::Timeout;
 use spokeshave::fit::Along;
+use spokeshave::result::Logged;
 use yew::UseStateSetter;
 
 use crate::app::{Later, RigRef};
 use crate::effect::after_frame::{Waiting, after_frame};
 use crate::keep;
-use crate::results::Results;
+use crate::results::{CarvedFound, Results};
 use crate::state::Opened;
 
 /// What has to be worked out.
@@ -48,6 +49,10 @@ pub enum Piece {
     Worth,
     /// The strength of the blade.
     Strength,
+    /// The carved blades.
+    Carved,
+    /// The logbook.
+    Logbook,
     /// Showing the flight points.
     Show,
     /// Showing the map and the curves as well.
@@ -75,6 +80,12 @@ impl Plan {
             if self.opened.bench {
                 pieces.extend([Piece::Strength, Piece::ShowAll]);
             }
+            if self.opened.readings.carved {
+                pieces.extend([Piece::Carved, Piece::ShowAll]);
+            }
+            if self.opened.readings.logbook {
+                pieces.extend([Piece::Logbook, Piece::ShowAll]);
+            }
         }
         pieces
     }
@@ -87,6 +98,13 @@ pub struct Work {
     _next: Rc<RefCell<Option<Timeout>>>,
 }
 
+/// What was read off the carved blades and in flight.
+#[derive(Clone)]
+struct Read {
+    carved: Option<Rc<Result<CarvedFound, String>>>,
+    logged: Option<Rc<Result<Logged, String>>>,
+}
+
 /// What the pieces need.
 struct Bench {
     plan: Plan,
@@ -94,6 +112,8 @@ struct Bench {
     before: Rc<Later>,
     setter: UseStateSetter<Rc<Later>>,
     next: std::rc::Weak<RefCell<Option<Timeout>>>,
+    /// The carved blades and the logbook, once they have been worked out; what was before until then.
+    read: RefCell<Read>,
 }
 
 impl Work {
@@ -106,7 +126,8 @@ impl Work {
         setter: UseStateSetter<Rc<Later>>,
     ) -> Self {
         let next = Rc::new(RefCell::new(None));
-        let bench = Rc::new(Bench { plan, results, before, setter, next: Rc::downgrade(&next) });
+        let read = RefCell::new(Read { carved: before.carved.clone(), logged: before.logged.clone() });
+        let bench = Rc::new(Bench { plan, results, before, setter, next: Rc::downgrade(&next), read });
         let waiting = after_frame(move || run(&bench, plan.pieces(), 0));
         Self { _waiting: waiting, _next: next }
     }
@@ -134,6 +155,8 @@ impl Bench {
             Piece::Ceilings => results.work_ceilings(self.plan.point),
             Piece::Worth => results.work_worth(),
             Piece::Strength => results.work_strength(),
+            Piece::Carved => self.read.borrow_mut().carved = results.carved(self.plan.point),
+            Piece::Logbook => self.read.borrow_mut().logged = results.logged(),
             Piece::Show | Piece::ShowMap | Piece::ShowAll => {
                 let later = self.shown(&mut results, piece);
                 drop(results);
@@ -162,6 +185,8 @@ impl Bench {
         (now.ceilings, now.worth) = (results.ceilings(point), results.worth());
         // An older sheet stays until the new one is there.
         now.strength = results.strength().or(now.strength);
+        let read = self.read.borrow();
+        (now.carved, now.logged) = (read.carved.clone(), read.logged.clone());
         now
     }
 }

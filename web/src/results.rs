@@ -3,11 +3,14 @@
 
 use std::rc::Rc;
 
+use spokeshave::carved;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::{self, Along, Offer};
-use spokeshave::job::{FlightPoint, Job, Wood};
+use spokeshave::job::{Carved, Factors, FlightPoint, Job, Logbook, Wood};
+use spokeshave::logbook;
 use spokeshave::result::{
-    Ceilings, Crossing, Envelope, PitchWorth, PointResult, SectionPoint, Strength, TakeOff,
+    Carved as CarvedResult, Ceilings, Crossing, Envelope, Logged, PitchWorth, PointResult, RemovalPlan,
+    SectionPoint, Strength, TakeOff,
 };
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
@@ -65,6 +68,20 @@ pub struct Offered {
     pub crossings: Vec<Crossing>,
 }
 
+/// The carved blades, and what can be put right where a flight point tells.
+#[derive(Clone, Debug, PartialEq)]
+pub struct CarvedFound {
+    /// As measured.
+    pub carved: CarvedResult,
+    /// What to take off, or why there is no plan.
+    pub plan: Result<RemovalPlan, String>,
+}
+
+/// The readings of the blades with the flight points they are judged at.
+type CarvedKey = (Vec<FlightPoint>, Option<Carved>, usize);
+/// The readings of the logbook with those of the blades that were flown.
+type LoggedKey = (Vec<FlightPoint>, Option<Carved>, Option<Logbook>);
+
 /// The results of one propeller.
 #[derive(Debug, Default)]
 pub struct Results {
@@ -83,6 +100,8 @@ pub struct Results {
     /// By the wood and all flight points.
     strengths: Shelf<(Option<Wood>, Vec<FlightPoint>), Sheet>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
+    carved: Shelf<CarvedKey, Result<CarvedFound, String>>,
+    logged: Shelf<LoggedKey, Result<Logged, String>>,
 }
 
 impl Results {
@@ -205,6 +224,24 @@ impl Results {
         self.sections.get(&(key, station), || rig.section_curve(i, station))
     }
 
+    /// The carved blades, and what to take off them for the departure at a flight point.
+    pub fn carved(&mut self, i: usize) -> Option<Rc<Result<CarvedFound, String>>> {
+        let rig = self.rig.clone()?;
+        let key = (rig.job.flight_points.clone(), rig.job.carved.clone(), i);
+        Some(self.carved.get(&key, || {
+            let carved = carved::analyse(&rig).map_err(|e| e.to_string())?;
+            Ok(CarvedFound { carved, plan: carved::plan(&rig, i).map_err(|e| e.to_string()) })
+        }))
+    }
+
+    /// What the logbook tells.
+    pub fn logged(&mut self) -> Option<Rc<Result<Logged, String>>> {
+        let rig = self.rig.clone()?;
+        let job = &rig.job;
+        let key = (job.flight_points.clone(), job.carved.clone(), job.logbook.clone());
+        Some(self.logged.get(&key, || logbook::estimate(&rig).map_err(|e| e.to_string())))
+    }
+
     fn at(&self, i: usize) -> Option<(Rc<Rig>, FlightPoint)> {
         let rig = self.rig.clone()?;
         let key = rig.job.flight_points.get(i)?.clone();
@@ -219,6 +256,12 @@ fn same_machine(a: &Job, b: &Job) -> bool {
         && a.engine == b.engine
         && a.aircraft == b.aircraft
         && a.sections == b.sections
+        && factors_used(a) == factors_used(b)
+}
+
+/// What the logbook found, where it is used.
+fn factors_used(job: &Job) -> Option<Factors> {
+    job.logbook.as_ref().filter(|logbook| logbook.in_use)?.factors
 }
 
 #[cfg(test)]

@@ -12,6 +12,7 @@ use super::wishes::some;
 pub const FEWEST_STATIONS: usize = 2;
 
 use super::machine::{AircraftChoice, EngineChoice, WoodChoice};
+use super::readings::{CarvedChoice, LogbookChoice};
 
 /// A change that is picked from a few.
 #[derive(Clone, Debug, PartialEq)]
@@ -58,6 +59,10 @@ pub enum Choice {
     Hold(Held, bool),
     /// Something of the wood.
     Wood(WoodChoice),
+    /// Something of the carved blades.
+    Carved(CarvedChoice),
+    /// Something of the logbook.
+    Logbook(LogbookChoice),
 }
 
 /// Ways the blades turn in the hub.
@@ -203,6 +208,8 @@ impl Choice {
             Self::Aims(_) => "what counts in a search".into(),
             Self::Hold(..) => "what a search leaves as drawn".into(),
             Self::Wood(choice) => choice.name(),
+            Self::Carved(choice) => choice.name(),
+            Self::Logbook(choice) => choice.name(),
         }
     }
 
@@ -260,6 +267,8 @@ impl Choice {
                 held.extend(on.then_some(*what));
             }
             Self::Wood(choice) => choice.apply(&mut next),
+            Self::Carved(choice) => choice.apply(&mut next),
+            Self::Logbook(choice) => choice.apply(&mut next),
         }
         next.wishes = next.wishes.and_then(some);
         Ok(next)

@@ -2,10 +2,11 @@
 
 use std::collections::BTreeMap;
 
+use spokeshave::carved::angle_of;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{Job, Problem};
 
-use super::{EngineFigure, Field, Measure};
+use super::{BladeFigure, EngineFigure, Field, Measure};
 use crate::number;
 use crate::units::{Quantity, Units};
 
@@ -58,7 +59,9 @@ pub fn tried(
         return Ok(without);
     }
     let quantity = field.quantity(job);
-    let value = number::read(units, quantity, text).map_err(|why| {
+    let minutes = matches!(field, Field::Reading(.., BladeFigure::Angle)).then(|| angle_of(text)).flatten();
+    let typed = minutes.map_or_else(|| number::read(units, quantity, text), Ok);
+    let value = typed.map_err(|why| {
         let example = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));
         example.map_or_else(|| sentence(&why), |e| format!("{} It was {e}.", sentence(&why)))
     })?;
@@ -122,10 +125,17 @@ fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem)
                 Field::Station(i, Measure::Thickness) => chord_m(job, i),
                 _ => 1.0,
             };
-            span_words(units, field.quantity(job), low * scale, high * scale, problem.above_lowest)
+            let allowed =
+                span_words(units, field.quantity(job), low * scale, high * scale, problem.above_lowest);
+            allowed + &hint(problem)
         }
         _ => elsewhere(units, field, value, problem),
     }
+}
+
+/// The likely cause, where the problem names one.
+fn hint(problem: &Problem) -> String {
+    problem.allowed.split_once("; ").map_or_else(String::new, |(_, cause)| format!(" {}", sentence(cause)))
 }
 
 fn elsewhere(units: Units, field: Field, value: f64, problem: &Problem) -> String {

@@ -6,6 +6,7 @@ use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
 use super::machine::{AircraftFigure, EngineFigure, WoodFigure};
 use super::measure::{Measure, write_station};
 use super::point_figure::PointFigure;
+use super::readings::{BladeFigure, LogFigure};
 use super::wishes::LimitFigure;
 use crate::units::Quantity;
 
@@ -44,6 +45,10 @@ pub enum Field {
     Limit(LimitFigure),
     /// A figure of the wood.
     Wood(WoodFigure),
+    /// A figure measured on a blade at a station.
+    Reading(usize, usize, BladeFigure),
+    /// A figure of a reading of the logbook.
+    Log(usize, LogFigure),
 }
 
 impl Field {
@@ -72,6 +77,8 @@ impl Field {
             Self::Engine(figure) => figure.quantity(),
             Self::Limit(figure) => figure.quantity(),
             Self::Wood(figure) => figure.quantity(),
+            Self::Reading(.., figure) => figure.quantity(),
+            Self::Log(_, figure) => figure.quantity(),
         }
     }
 
@@ -98,6 +105,10 @@ impl Field {
             Self::Engine(figure) => figure.name(),
             Self::Limit(figure) => figure.name().into(),
             Self::Wood(figure) => figure.name().into(),
+            Self::Reading(blade, station, figure) => {
+                format!("{} of blade {} at station {}", figure.name(), blade + 1, station + 1)
+            }
+            Self::Log(i, figure) => format!("{} of reading {}", figure.name(), i + 1),
         }
     }
 
@@ -121,6 +132,11 @@ impl Field {
             Self::Engine(figure) => figure.path(),
             Self::Limit(figure) => figure.path(),
             Self::Wood(figure) => figure.path(),
+            Self::Reading(blade, station, figure) => {
+                let i = BladeFigure::index(job, blade, station);
+                format!("carved.blades[{blade}].readings[{i}].{}", figure.key())
+            }
+            Self::Log(i, figure) => format!("logbook.readings[{i}].{}", figure.key()),
         }
     }
 
@@ -144,6 +160,8 @@ impl Field {
             (Self::Engine(figure), _) => figure.value(job),
             (Self::Limit(figure), _) => figure.value(job),
             (Self::Wood(figure), _) => figure.value(job),
+            (Self::Reading(blade, station, figure), _) => figure.value(job, blade, station),
+            (Self::Log(i, figure), _) => figure.value(job, i),
             _ => None,
         }
     }
@@ -203,6 +221,8 @@ impl Field {
             (Self::Engine(figure), _) => return figure.write(job, value),
             (Self::Limit(figure), _) => figure.write(job, value),
             (Self::Wood(figure), _) => return figure.write(job, value),
+            (Self::Reading(blade, station, figure), _) => return figure.write(job, blade, station, value),
+            (Self::Log(i, figure), _) => return figure.write(job, i, value),
             _ => return false,
         }
         true
@@ -225,6 +245,8 @@ impl Field {
                 true
             }
             Self::Wood(figure) => figure.clear(job),
+            Self::Reading(blade, station, figure) => figure.clear(job, blade, station),
+            Self::Log(i, figure) => figure.clear(job, i),
             _ => false,
         }
     }

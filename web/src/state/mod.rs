@@ -12,6 +12,7 @@ pub mod measure;
 pub mod notice;
 pub mod opened;
 pub mod point_figure;
+pub mod readings;
 #[cfg(test)]
 mod tests;
 #[cfg(test)]
@@ -40,6 +41,7 @@ pub use measure::Measure;
 pub use notice::Notice;
 pub use opened::{Opened, Part};
 pub use point_figure::PointFigure;
+pub use readings::{BladeFigure, CarvedChoice, LogFigure, LogbookChoice};
 pub use variant::{Beside, Variant, Variants};
 pub use wishes::LimitFigure;
 
@@ -274,7 +276,9 @@ impl State {
             | Choice::RemovePoint(_)
             | Choice::Aircraft(_)
             | Choice::Engine(_)
-            | Choice::Wood(_) => {}
+            | Choice::Wood(_)
+            | Choice::Carved(_)
+            | Choice::Logbook(_) => {}
             _ => return,
         }
         self.drafts.clear();

@@ -9,6 +9,10 @@ pub enum Part {
     Fit,
     /// The Bench panel.
     Bench,
+    /// The panel of the carved blades.
+    Carved,
+    /// The logbook's panel.
+    Logbook,
 }
 
 /// Which of them are open.
@@ -20,6 +24,17 @@ pub struct Opened {
     pub fit: bool,
     /// The Bench panel.
     pub bench: bool,
+    /// The panels of what was read.
+    pub readings: OpenedReadings,
+}
+
+/// Which panels of what was read are open.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
+pub struct OpenedReadings {
+    /// The panel of the carved blades.
+    pub carved: bool,
+    /// The logbook's panel.
+    pub logbook: bool,
 }
 
 impl Opened {
@@ -30,6 +45,8 @@ impl Opened {
             Part::Engine => Self { engine: open, ..self },
             Part::Fit => Self { fit: open, ..self },
             Part::Bench => Self { bench: open, ..self },
+            Part::Carved => Self { readings: OpenedReadings { carved: open, ..self.readings }, ..self },
+            Part::Logbook => Self { readings: OpenedReadings { logbook: open, ..self.readings }, ..self },
         }
     }
 }

@@ -46,6 +46,18 @@ pub fn bench() -> Html {
     }
 }
 
+/// Before readings are taken on the ground or in flight.
+pub fn logbook() -> Html {
+    html! {
+        <aside class="caution">
+            <b>{ "Before you act. " }</b>
+            { "Tie the aircraft down for ground runs, chock it, and keep everybody out of the disc plane. In flight look out first and let a second \
+               person write. A blade that was planed is inspected and balanced before it runs again, first at low rpm. The engine maker's limits, the \
+               flight manual and your aviation authority's rules come before any figure here." }
+        </aside>
+    }
+}
+
 /// Before wood is cut by what stands on paper.
 pub fn paper() -> Html {
     html! { <aside class="caution">{ spokeshave::bench::CAUTIONS.join(" ") }</aside> }

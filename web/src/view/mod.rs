@@ -2,6 +2,7 @@
 
 pub mod bench;
 pub mod blade;
+pub mod carved;
 pub mod caution;
 pub mod chips;
 pub mod coefficients;
@@ -9,12 +10,14 @@ pub mod drop;
 pub mod fit;
 pub mod form;
 pub mod head;
+pub mod logbook;
 pub mod machine;
 pub mod mark;
 pub mod method;
 pub mod notice;
 pub mod page;
 pub mod panel;
+pub mod pasted;
 pub mod points;
 pub mod reading;
 pub mod room;

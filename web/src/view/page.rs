@@ -7,9 +7,11 @@ use yew::prelude::*;
 
 use super::bench::{self, BenchPanel};
 use super::blade::{BladeSettings, StationTable, in_a_line};
+use super::carved::{self, CarvedPanel};
 use super::coefficients::{self, Coefficients};
 use super::fit::{self, FitPanel};
 use super::head::Head;
+use super::logbook::{self, LogbookPanel};
 use super::machine::aircraft::same_aircraft;
 use super::machine::engine::same_engine;
 use super::machine::{AircraftPanel, EnginePanel, aircraft_in_a_line, engine_in_a_line};
@@ -133,7 +135,15 @@ fn Panels(props: &PageProps) -> Html {
                 <BenchPanel state={state.part(bench::same_bench)} strength={later.strength.clone()} />
             </Panel>
             <Workshop number={10} rig={later.rig.clone()} unit={state.units.length} />
-            <Panel id="method" number={11} title="How it is computed" result={method_line(props)} open={*open}>
+            <Panel id="carved" number={11} title="As carved" open=false onunfold={act.on(|open| Action::Unfold(Part::Carved, open))}
+                result={carved::in_a_line(state, later.carved.as_deref())}>
+                <CarvedPanel state={state.part(carved::same_carved)} found={later.carved.clone()} />
+            </Panel>
+            <Panel id="logbook" number={12} title="Logbook" open=false onunfold={act.on(|open| Action::Unfold(Part::Logbook, open))}
+                result={logbook::in_a_line(state)}>
+                <LogbookPanel state={state.part(logbook::same_logbook)} logged={later.logged.clone()} rig={later.rig.clone()} />
+            </Panel>
+            <Panel id="method" number={13} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
         </>

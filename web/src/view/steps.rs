@@ -4,7 +4,7 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 12] = [
+pub const PARTS: [(&str, &str); 14] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
@@ -16,7 +16,9 @@ pub const PARTS: [(&str, &str); 12] = [
     ("sections", "8 Sections"),
     ("bench", "9 Bench"),
     ("paper", "10 Paper"),
-    ("method", "11 Method"),
+    ("carved", "11 As carved"),
+    ("logbook", "12 Logbook"),
+    ("method", "13 Method"),
 ];
 
 /// Height over which a part counts as reached, pixels.

@@ -5,26 +5,26 @@ use yew::prelude::*;
 
 /// Properties of [`Line`].
 #[derive(Properties, PartialEq)]
-pub(super) struct LineProps {
+pub(in crate::view) struct LineProps {
     /// Id, for the message to be found by; used once on the page.
-    pub(super) id: AttrValue,
-    pub(super) label: AttrValue,
+    pub(in crate::view) id: AttrValue,
+    pub(in crate::view) label: AttrValue,
     #[prop_or_default]
-    pub(super) unit: AttrValue,
-    pub(super) text: AttrValue,
+    pub(in crate::view) unit: AttrValue,
+    pub(in crate::view) text: AttrValue,
     #[prop_or_default]
-    pub(super) message: Option<AttrValue>,
+    pub(in crate::view) message: Option<AttrValue>,
     /// Whether it holds words or a list rather than a figure.
     #[prop_or_default]
-    pub(super) long: bool,
+    pub(in crate::view) long: bool,
     #[prop_or_default]
-    pub(super) disabled: bool,
-    pub(super) on: Callback<String>,
+    pub(in crate::view) disabled: bool,
+    pub(in crate::view) on: Callback<String>,
 }
 
 /// A box in a line with its label.
 #[component]
-pub(super) fn Line(props: &LineProps) -> Html {
+pub(in crate::view) fn Line(props: &LineProps) -> Html {
     let wrong = props.message.is_some();
     let id = format!("{}-message", props.id);
     let oninput = props.on.reform(|e: InputEvent| {
@@ -45,19 +45,19 @@ pub(super) fn Line(props: &LineProps) -> Html {
 
 /// Properties of [`Sheet`].
 #[derive(Properties, PartialEq)]
-pub(super) struct SheetProps {
-    pub(super) id: AttrValue,
-    pub(super) label: AttrValue,
-    pub(super) text: AttrValue,
-    pub(super) hint: AttrValue,
+pub(in crate::view) struct SheetProps {
+    pub(in crate::view) id: AttrValue,
+    pub(in crate::view) label: AttrValue,
+    pub(in crate::view) text: AttrValue,
+    pub(in crate::view) hint: AttrValue,
     #[prop_or_default]
-    pub(super) message: Option<AttrValue>,
-    pub(super) on: Callback<String>,
+    pub(in crate::view) message: Option<AttrValue>,
+    pub(in crate::view) on: Callback<String>,
 }
 
 /// A box for a text of many lines.
 #[component]
-pub(super) fn Sheet(props: &SheetProps) -> Html {
+pub(in crate::view) fn Sheet(props: &SheetProps) -> Html {
     let wrong = props.message.is_some();
     let id = format!("{}-message", props.id);
     let oninput = props.on.reform(|e: InputEvent| {
@@ -76,19 +76,19 @@ pub(super) fn Sheet(props: &SheetProps) -> Html {
 
 /// Properties of [`Opener`].
 #[derive(Properties, PartialEq)]
-pub(super) struct OpenerProps {
+pub(in crate::view) struct OpenerProps {
     /// What stands on the button.
-    pub(super) label: AttrValue,
+    pub(in crate::view) label: AttrValue,
     /// Endings of files, as the browser's picker takes them.
-    pub(super) accept: AttrValue,
-    pub(super) most_bytes: usize,
+    pub(in crate::view) accept: AttrValue,
+    pub(in crate::view) most_bytes: usize,
     /// Name and text, or why it could not be read.
-    pub(super) on: Callback<(String, Result<String, String>)>,
+    pub(in crate::view) on: Callback<(String, Result<String, String>)>,
 }
 
 /// A button that opens a text file.
 #[component]
-pub(super) fn Opener(props: &OpenerProps) -> Html {
+pub(in crate::view) fn Opener(props: &OpenerProps) -> Html {
     let picker = use_node_ref();
     let reading = use_mut_ref(|| None);
     let onchange = {

@@ -1,6 +1,6 @@
 //! Sections: the tables a blade uses and where they come from, polars made of an outline, measured tables.
 
-mod boxes;
+pub(in crate::view) mod boxes;
 mod carved;
 mod charts;
 mod drawing;

@@ -1,0 +1,121 @@
+//! The As carved panel: readings typed at the bench, what they say, and what to take off.
+
+mod entry;
+mod found;
+mod sheet;
+mod take_off;
+
+use std::rc::Rc;
+
+use spokeshave::job::AngleReference;
+use yew::prelude::*;
+
+use super::form::Pick;
+use super::{Act, Seen, use_act};
+use crate::number::{fixed, with_unit};
+use crate::results::CarvedFound;
+use crate::state::{Action, CarvedChoice, Choice, Running, State};
+use crate::units::Quantity;
+use entry::BladeEntry;
+use found::{Balance, Differences, Points};
+use sheet::ReadingsSheet;
+use take_off::TakeOffSheet;
+
+/// Properties of [`CarvedPanel`].
+#[derive(Properties, PartialEq)]
+pub struct CarvedPanelProps {
+    /// The state.
+    pub state: Seen,
+    /// What the readings say; may be a frame old, not there before it is worked out.
+    pub found: Option<Rc<Result<CarvedFound, String>>>,
+}
+
+/// Whether the panel shows the same of two states.
+#[must_use]
+pub fn same_carved(a: &State, b: &State) -> bool {
+    a.job().carved == b.job().carved
+        && a.job().propeller == b.job().propeller
+        && a.job().flight_points == b.job().flight_points
+        && a.drafts == b.drafts
+        && (a.point, a.units) == (b.point, b.units)
+}
+
+/// The carved blades in a line.
+#[must_use]
+pub fn in_a_line(state: &State, found: Option<&Result<CarvedFound, String>>) -> String {
+    let readings: usize =
+        state.job().carved.iter().flat_map(|c| &c.blades).map(|blade| blade.readings.len()).sum();
+    if readings == 0 {
+        return "measure each blade: angle, chord, thickness".into();
+    }
+    let count = if readings == 1 { "1 reading".into() } else { format!("{readings} readings") };
+    let Some(Ok(found)) = found else { return count };
+    let stations = found.carved.blades.iter().flat_map(|b| &b.stations);
+    let worst = stations.map(|s| s.angle_deg.from_drawn.abs()).fold(0.0, f64::max);
+    format!(
+        "{count}; up to {}° from the drawing; {} heavy at the tip",
+        fixed(worst, 1),
+        with_unit(state.units, Quantity::Mass, Some(1e-3 * found.carved.balance.grams_at_tip))
+    )
+}
+
+/// What a choice about the blades does.
+fn choose<T: 'static>(act: &Act, make: impl Fn(T) -> CarvedChoice + 'static) -> Callback<T> {
+    act.on(move |what: T| Action::Choose(Choice::Carved(make(what)), Running::default()))
+}
+
+/// Boxes for every blade, then what they say.
+#[component]
+pub fn CarvedPanel(props: &CarvedPanelProps) -> Html {
+    const REFERENCES: [AngleReference; 2] = [AngleReference::FlatFace, AngleReference::ChordLine];
+    let (act, state) = (use_act(), &props.state);
+    let job = state.job();
+    let reference = job.carved.as_ref().map_or(AngleReference::FlatFace, |c| c.angle_reference);
+    let pick = choose(&act, |i: usize| CarvedChoice::Reference(REFERENCES[i.min(1)]));
+    let blades = (0..job.propeller.blades as usize)
+        .map(|blade| html! { <BladeEntry key={blade} {blade} state={state.clone()} /> });
+    html! {
+        <div class="carved">
+            <p class="note">
+                { "Type what the protractor and the callipers read; leave empty what was not measured. Enter goes down the column. \
+                   An angle may be in decimals or in degrees and minutes, 18 30. Between readings the difference from the drawing is interpolated." }
+            </p>
+            <div class="settings unprinted">
+                <Pick label="Angles read" options={vec!["on the flat face".into(), "to the chord line".into()]}
+                    picked={REFERENCES.iter().position(|r| *r == reference)} onpick={pick} />
+            </div>
+            <div class="carved-blades">{ for blades }</div>
+            <ReadingsSheet state={state.clone()} />
+            { results(props) }
+        </div>
+    }
+}
+
+fn results(props: &CarvedPanelProps) -> Html {
+    if props.state.job().carved.is_none() {
+        return html! {};
+    }
+    let found = match props.found.as_deref() {
+        None => {
+            return html! { <p class="note" aria-busy="true">{ "The readings are worked out while this panel is open." }</p> };
+        }
+        Some(Err(why)) => return html! { <p class="note">{ format!("Nothing yet: {why}.") }</p> },
+        Some(Ok(found)) => Rc::new(found.clone()),
+    };
+    let doubts = found.carved.doubts.iter().map(|d| {
+        let place = with_unit(props.state.units, Quantity::Length, Some(d.radius_m));
+        html! { <li>{ format!("Blade {}, {place}: {}.", d.blade, d.message) }</li> }
+    });
+    let units = props.state.units;
+    html! {
+        <>
+            if !found.carved.doubts.is_empty() {
+                <div class="doubts" role="status"><b>{ "Hard to believe" }</b><ul>{ for doubts }</ul></div>
+            }
+            <Differences found={found.clone()} {units} />
+            <Points found={found.clone()} {units} />
+            <Balance found={found.clone()} {units} />
+            <TakeOffSheet {found} {units} />
+        </>
+    }
+}

@@ -1,0 +1,72 @@
+//! The sheet for the bench: what to take off, where.
+
+use spokeshave::result::{PlannedBlade, PlannedStation, RemovalPlan};
+use yew::prelude::*;
+
+use super::found::FoundProps;
+use crate::number::{figure, fixed, fixed_or_none, signed};
+use crate::units::{Quantity, Units};
+
+/// A table for each blade.
+#[component]
+pub(super) fn TakeOffSheet(props: &FoundProps) -> Html {
+    match &props.found.plan {
+        Err(why) => html! { <p class="note">{ format!("No plan of what to take off: {why}.") }</p> },
+        Ok(plan) => html! {
+            <>
+                <h3>{ format!("What to take off, for the departure as drawn at {}", plan.flight_point) }</h3>
+                <p class="note">
+                    { "Depths off the flat face at the leading or the trailing edge fall to nothing at the other edge; off the back at the thickest \
+                       place, fading to the edges; then off the trailing edge. Wood only comes off: what stays wrong is in the last column. \
+                       Cut less than it says, measure again, and stop at the least thickness that holds." }
+                </p>
+                <div class="duo">{ for plan.blades.iter().map(|b| table(plan, b, props.units)) }</div>
+            </>
+        },
+    }
+}
+
+fn table(plan: &RemovalPlan, blade: &PlannedBlade, units: Units) -> Html {
+    let name = format!("Blade {}: take off", blade.blade);
+    let mm = units.symbol(Quantity::Length);
+    let after = plan.after.blades.iter().find(|b| b.blade == blade.blade);
+    let left = |i: usize| after.and_then(|b| b.stations.get(i)).map(|s| s.angle_deg.from_drawn);
+    let rows = blade.stations.iter().enumerate().map(|(i, s)| row(s, left(i), units));
+    html! {
+        <div class="scroll" tabindex="0" role="region" aria-label={name.clone()}>
+            <table class="sheet-table take-off">
+                <caption>{ name }</caption>
+                <thead><tr>
+                    <th scope="col">{ "r" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Face at LE" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Face at TE" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Back" }<small>{ mm }</small></th>
+                    <th scope="col">{ "TE edge" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Then face" }<small>{ "deg" }</small></th>
+                    <th scope="col">{ "Chord" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Thick" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Left from drawn" }<small>{ "deg" }</small></th>
+                </tr></thead>
+                <tbody>{ for rows }</tbody>
+            </table>
+        </div>
+    }
+}
+
+fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
+    let length = |v: f64| figure(units, Quantity::Length, Some(v));
+    let depth = |v: f64| {
+        let text = if v > 0.0 { fixed(units.shown(Quantity::Length, v), 2) } else { "·".into() };
+        html! { <td class={classes!((v > 0.0).then_some("cut"))}>{ text }</td> }
+    };
+    html! {
+        <tr>
+            <th scope="row">{ length(s.radius_m) }</th>
+            { depth(s.face_leading_m) }{ depth(s.face_trailing_m) }{ depth(s.back_m) }{ depth(s.trailing_edge_m) }
+            <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
+            <td>{ length(s.chord_m) }</td>
+            <td>{ length(s.thickness_m) }</td>
+            <td>{ left_deg.map(|d| signed(d, 2)) }</td>
+        </tr>
+    }
+}

@@ -1,0 +1,130 @@
+//! What to change for a wanted rpm or speed.
+
+use spokeshave::change::{Wanted, changes};
+use spokeshave::result::{Change, Figure, Means};
+use yew::prelude::*;
+
+use super::lines::points;
+use crate::app::RigRef;
+use crate::number::{read, signed, with_unit};
+use crate::units::{Quantity, Units};
+use crate::view::Seen;
+use crate::view::form::Pick;
+use crate::view::sections::boxes::Line;
+
+/// Properties of [`ChangeForm`].
+#[derive(Properties, PartialEq)]
+pub(super) struct ChangeFormProps {
+    pub(super) state: Seen,
+    pub(super) rig: Option<RigRef>,
+}
+
+/// What was asked and what came of it.
+#[derive(Clone, Debug, Default, PartialEq)]
+struct Asked {
+    point: usize,
+    speed: bool,
+    text: AttrValue,
+    answer: Option<Result<Vec<Change>, String>>,
+}
+
+/// The form and the ways to what is wanted.
+#[component]
+pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
+    let asked = use_state_eq(Asked::default);
+    {
+        // Another job, another answer.
+        let asked = asked.clone();
+        use_effect_with(props.rig.clone(), move |_| asked.set(Asked { answer: None, ..(*asked).clone() }));
+    }
+    let now = (*asked).clone();
+    let pick_point = {
+        let (asked, now) = (asked.clone(), now.clone());
+        Callback::from(move |point| asked.set(Asked { point, answer: None, ..now.clone() }))
+    };
+    let pick_figure = {
+        let (asked, now) = (asked.clone(), now.clone());
+        Callback::from(move |i: usize| asked.set(Asked { speed: i == 1, answer: None, ..now.clone() }))
+    };
+    let typed = {
+        let (asked, now) = (asked.clone(), now.clone());
+        Callback::from(move |text: String| {
+            asked.set(Asked { text: text.into(), answer: None, ..now.clone() });
+        })
+    };
+    let ask = {
+        let (asked, now, rig, units) = (asked.clone(), now.clone(), props.rig.clone(), props.state.units);
+        Callback::from(move |_: MouseEvent| {
+            let answer = rig.as_ref().map(|rig| answered(rig, &now, units));
+            asked.set(Asked { answer, ..now.clone() });
+        })
+    };
+    let names =
+        props.state.job().flight_points.iter().map(|p| AttrValue::from(p.name.clone())).collect::<Vec<_>>();
+    let quantity = quantity(now.speed);
+    html! {
+        <div class="change">
+            <h3>{ "What to change" }</h3>
+            <div class="settings unprinted">
+                <Pick label="At" options={names} picked={now.point} onpick={pick_point} />
+                <Pick label="Wanted" options={vec!["rpm of the propeller".into(), "airspeed".into()]} picked={usize::from(now.speed)} onpick={pick_figure} />
+                <Line id="wanted" label="How much" unit={props.state.units.symbol(quantity)} text={now.text.clone()}
+                    message={now.answer.as_ref().and_then(|a| a.as_ref().err()).map(|why| AttrValue::from(why.clone()))} on={typed} />
+                <button type="button" class="act" onclick={ask}>{ "Work out the changes" }</button>
+            </div>
+            if let Some(Ok(changes)) = &now.answer {
+                { for changes.iter().map(|c| told(c, now.speed, props.state.units)) }
+            }
+        </div>
+    }
+}
+
+fn quantity(speed: bool) -> Quantity {
+    if speed { Quantity::Speed } else { Quantity::Rpm }
+}
+
+fn answered(rig: &RigRef, asked: &Asked, units: Units) -> Result<Vec<Change>, String> {
+    let value = read(units, quantity(asked.speed), &asked.text).map_err(|why| format!("Wanted: {why}."))?;
+    let figure = if asked.speed { Figure::AirspeedMS } else { Figure::Rpm };
+    changes(&rig.0, &Wanted { point: asked.point, figure, value }).map_err(|e| e.to_string())
+}
+
+fn told(c: &Change, speed: bool, units: Units) -> Html {
+    let amount = match c.means {
+        Means::Pitch => format!("The whole blade turned by {}°", signed(c.amount, 2)),
+        Means::Twist => format!(
+            "The outer half turned, from nothing at half the radius to {}° at the tip",
+            signed(c.amount, 2)
+        ),
+        Means::Diameter => format!(
+            "{} {}\u{a0}{} of diameter",
+            if c.by_removal { "Tips trimmed:" } else { "Another diameter:" },
+            signed(units.shown(Quantity::Length, c.amount), 0),
+            units.symbol(Quantity::Length)
+        ),
+    };
+    let how = if c.by_removal && c.means != Means::Diameter {
+        ", by planing the face as far as each station allows"
+    } else {
+        ""
+    };
+    let reached = match (c.reached, c.had) {
+        (true, _) => String::new(),
+        (false, Some(had)) => {
+            format!(" Not reached: {} at most.", with_unit(units, quantity(speed), Some(had)))
+        }
+        (false, None) => format!(" Not reached. {}", c.state.sentence()),
+    };
+    let then = format!(
+        "{amount}{how}.{reached} Then {} across, pitch {} at three quarters of the radius.",
+        with_unit(units, Quantity::Length, Some(c.diameter_m)),
+        with_unit(units, Quantity::Length, Some(c.pitch_m))
+    );
+    let pairs = c.flight_points.iter().map(|p| (&p.drawn, &p.shaped));
+    html! {
+        <details open={c.reached}>
+            <summary>{ then }</summary>
+            { points("Every flight point now and changed", ["now", "changed"], pairs, units) }
+        </details>
+    }
+}

@@ -1,0 +1,106 @@
+//! Readings beside what is expected, and the flight points before and after.
+
+use std::rc::Rc;
+
+use spokeshave::result::{Brief, LogLine, Logged};
+use yew::prelude::*;
+
+use crate::number::{figure, fixed_or_none, signed_or_none};
+use crate::units::{Quantity, Units};
+
+/// Properties of the tables.
+#[derive(Properties, PartialEq)]
+pub(super) struct LinesProps {
+    pub(super) logged: Rc<Logged>,
+    pub(super) units: Units,
+}
+
+/// Every reading with its residual.
+#[component]
+pub(super) fn Lines(props: &LinesProps) -> Html {
+    let rows = props.logged.readings.iter().enumerate().map(|(i, line)| row(i, line, props.units));
+    html! {
+        <div class="scroll" tabindex="0" role="region" aria-label="Readings against what is expected">
+            <table class="sheet-table">
+                <caption>{ "Readings against what is expected without and with the factors" }</caption>
+                <thead><tr>
+                    <th scope="col">{ "Reading" }</th><th scope="col">{ "Rpm read" }</th><th scope="col">{ "less expected, before" }</th>
+                    <th scope="col">{ "with the factors" }</th><th scope="col">{ "Fuel or current" }</th><th scope="col">{ "expected, before" }</th>
+                    <th scope="col">{ "with the factors" }</th><th scope="col">{ "Off, in σ" }</th><th scope="col">{ "" }</th>
+                </tr></thead>
+                <tbody>{ for rows }</tbody>
+            </table>
+        </div>
+    }
+}
+
+fn row(i: usize, l: &LogLine, units: Units) -> Html {
+    let less = |expected: Option<f64>| signed_or_none(expected.map(|e| l.engine_rpm - e), 0);
+    html! {
+        <tr class={classes!(l.outlier.then_some("outlier"))}>
+            <th scope="row">{ i + 1 }</th>
+            <td>{ figure(units, Quantity::Rpm, Some(l.engine_rpm)) }</td>
+            <td>{ less(l.before_rpm) }</td>
+            <td>{ less(l.after_rpm) }</td>
+            <td>{ fixed_or_none(l.consumption, 2) }</td>
+            <td>{ fixed_or_none(l.before_consumption, 2) }</td>
+            <td>{ fixed_or_none(l.after_consumption, 2) }</td>
+            <td>{ fixed_or_none(l.off, 1) }</td>
+            <td class="state">{ &l.remark }</td>
+        </tr>
+    }
+}
+
+/// Every flight point before and after.
+#[component]
+pub(super) fn BeforeAfter(props: &LinesProps) -> Html {
+    let pairs = props.logged.flight_points.iter().map(|c| (&c.drawn, &c.shaped));
+    html! { { points("Every flight point without and with the factors", ["without", "with"], pairs, props.units) } }
+}
+
+/// Flight points in pairs of rows.
+pub(super) fn points<'b>(
+    caption: &str,
+    names: [&'static str; 2],
+    pairs: impl Iterator<Item = (&'b Brief, &'b Brief)>,
+    units: Units,
+) -> Html {
+    let rows = pairs
+        .map(|(a, b)| html! { <>{ brief(a, names[0], true, units) }{ brief(b, names[1], false, units) }</> });
+    let heading = |words: &'static str, quantity| html! { <th scope="col">{ words }<small>{ units.symbol(quantity) }</small></th> };
+    html! {
+        <div class="scroll" tabindex="0" role="region" aria-label={caption.to_string()}>
+            <table class="sheet-table">
+                <caption>{ caption }</caption>
+                <thead><tr>
+                    <th scope="col">{ "Flight point" }</th><th scope="col">{ "" }</th>
+                    { heading("Speed", Quantity::Speed) }{ heading("Rpm", Quantity::Number) }{ heading("Thrust", Quantity::Force) }
+                    { heading("Power", Quantity::Power) }{ heading("Efficiency", Quantity::Number) }{ heading("Climb", Quantity::Climb) }
+                    <th scope="col">{ "" }</th>
+                </tr></thead>
+                <tbody>{ for rows }</tbody>
+            </table>
+        </div>
+    }
+}
+
+fn brief(b: &Brief, name: &'static str, first: bool, units: Units) -> Html {
+    let words = match (b.held_at_limit, b.rpm) {
+        (true, _) => "throttled back to the limit rpm",
+        (false, None) => b.state.sentence(),
+        (false, Some(_)) => "",
+    };
+    html! {
+        <tr>
+            <th scope="row">{ if first { b.name.clone() } else { String::new() } }</th>
+            <td>{ name }</td>
+            <td>{ figure(units, Quantity::Speed, b.airspeed_m_s) }</td>
+            <td>{ figure(units, Quantity::Rpm, b.rpm) }</td>
+            <td>{ figure(units, Quantity::Force, b.thrust_n) }</td>
+            <td>{ figure(units, Quantity::Power, b.power_w) }</td>
+            <td>{ fixed_or_none(b.efficiency, 3) }</td>
+            <td>{ figure(units, Quantity::Climb, b.rate_of_climb_m_s) }</td>
+            <td class="state">{ words }</td>
+        </tr>
+    }
+}
