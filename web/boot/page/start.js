@@ -26,7 +26,7 @@
   function unpack() {
     return gunzip(bytesOf("page-opener"))
       .then(function (bytes) { return page_opener({ module_or_path: bytes }); })
-      .then(function () { return page_opener.open(bytesOf("page-engine")); });
+      .then(function () { return page_opener.open(document.getElementById("page-engine").textContent); });
   }
 
   function start() {

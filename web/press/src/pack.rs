@@ -21,7 +21,8 @@ pub(crate) struct Packed {
 pub(crate) fn pack(modules: &Modules, style: &str) -> Result<Packed> {
     let (glue, wasm) = bind(&modules.page, "wasm_bindgen")?;
     let (opener_glue, opener) = bind(&modules.opener, "page_opener")?;
-    let engine = BASE64_STANDARD.encode(lzma(&wasm)?);
+    // A script node must not hold `<` before some other letters; the opener puts it back.
+    let engine = base85::encode(&lzma(&wasm)?).replace('<', ",");
     let opener = BASE64_STANDARD.encode(gzip(&opener)?);
     let boot = BOOT_SCRIPTS.concat();
     let parts = Parts {
