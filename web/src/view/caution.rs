@@ -30,8 +30,9 @@ pub fn shape() -> Html {
     html! {
         <aside class="caution">
             <b>{ "Before you act. " }</b>
-            { "Strength is not judged here: a blade that comes out thinner or narrower than a proven one needs its own check of \
-               strength, flutter and balance, and a licensed inspector's or engineer's word where the rules ask for it." }
+            { "What is shaped here is judged by the air alone, unless the job names its wood and a stress margin is asked for. A blade that comes \
+               out thinner or narrower than a proven one needs its own check of strength (the Bench panel, steady load only), flutter and \
+               balance, and a licensed inspector's or engineer's word where the rules ask for it." }
         </aside>
     }
 }

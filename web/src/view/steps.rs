@@ -8,7 +8,7 @@ pub const PARTS: [(&str, &str); 14] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
-    ("points", "3 Flight points"),
+    ("points", "3 Points"),
     ("blade", "4 Blade"),
     ("fit", "5 Fit"),
     ("shape", "6 Shape"),
