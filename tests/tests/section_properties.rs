@@ -1,6 +1,6 @@
 //! Sections as a beam sees them, against a finite-element tool of general use and closed forms.
 //!
-//! Values: `sectionproperties` 3.10.2 (meshes of some 3000 triangles; torsion constant by its warping analysis) and `shapely` 2.2.0 (areas), both from PyPI,
+//! Values: `sectionproperties` 3.10.2 (meshes of some 3000 triangles; torsion constant by its warping analysis) and `shapely` 2.2.0 (areas), both from the Python package index,
 //! on the very points of the shipped outlines.
 
 use spokeshave::section::outline::{Outline, naca_four_digit};

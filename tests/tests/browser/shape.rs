@@ -82,6 +82,7 @@ async fn the_page_answers_during_a_search_which_keeps_its_best_when_called_off()
 async fn impossible_wishes_are_refused_with_what_is_in_the_way() -> Result<()> {
     drive("impossible", async |browser| {
         browser.open_page().await?;
+        browser.wait_for_text("What counts, limits, what stays as drawn").await?;
         browser.run("document.querySelector('.wishes').open = true").await?;
         browser.control("textbox", "Greatest diameter, mm").await?.enter("800").await?;
         browser.press("Search").await?;

@@ -16,7 +16,7 @@ pub fn standing_start() -> Html {
 /// Before a figure of the fit is flown.
 pub fn fit() -> Html {
     html! {
-        <aside class="caution">
+        <aside class="caution" aria-label="Before you act on the fit">
             <b>{ "Before you act. " }</b>
             { "These are estimates for still air, one mass and an engine in good order. Leave margin on take-off, climb, range and \
                rpm, and prove them step by step. Keep out of the disc plane on the ground. The flight manual, the engine maker's \
@@ -28,7 +28,7 @@ pub fn fit() -> Html {
 /// Before a shaped blade is made.
 pub fn shape() -> Html {
     html! {
-        <aside class="caution">
+        <aside class="caution" aria-label="Before you act on a shaped blade">
             <b>{ "Before you act. " }</b>
             { "What is shaped here is judged by the air alone, unless the job names its wood and a stress margin is asked for. A blade that comes \
                out thinner or narrower than a proven one needs its own check of strength (the Bench panel, steady load only), flutter and \
@@ -40,7 +40,7 @@ pub fn shape() -> Html {
 /// Before a blade is cut or run by what the bench says.
 pub fn bench() -> Html {
     html! {
-        <aside class="caution">
+        <aside class="caution" aria-label="Before you act at the bench">
             <b>{ "Before you act" }</b>
             <ul>{ for spokeshave::wood::CAUTIONS.iter().map(|c| html! { <li>{ *c }</li> }) }</ul>
         </aside>
@@ -50,7 +50,7 @@ pub fn bench() -> Html {
 /// Before readings are taken on the ground or in flight.
 pub fn logbook() -> Html {
     html! {
-        <aside class="caution">
+        <aside class="caution" aria-label="Before you act on the logbook">
             <b>{ "Before you act. " }</b>
             { "Tie the aircraft down for ground runs, chock it, and keep everybody out of the disc plane. In flight look out first and let a second \
                person write. A blade that was planed is inspected and balanced before it runs again, first at low rpm. The engine maker's limits, the \
@@ -61,7 +61,7 @@ pub fn logbook() -> Html {
 
 /// Before wood is cut by what stands on paper.
 pub fn paper() -> Html {
-    html! { <aside class="caution">{ spokeshave::bench::CAUTIONS.join(" ") }</aside> }
+    html! { <aside class="caution" aria-label="Before you act on paper">{ spokeshave::bench::CAUTIONS.join(" ") }</aside> }
 }
 
 /// At the foot of the page.
