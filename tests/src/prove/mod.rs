@@ -20,7 +20,10 @@ pub(crate) fn everything() -> Result<Report> {
     let mut report = Report::default();
     report.check("layout of the sources", || cargo(&workspace, &["fmt", "--all", "--check"]));
     report.check("lints", || {
-        cargo(&workspace, &["clippy", "--workspace", "--all-targets", "--", "--deny", "warnings"])
+        cargo(
+            &workspace,
+            &["clippy", "--release", "--workspace", "--all-targets", "--", "--deny", "warnings"],
+        )
     });
     let page = report.check("the page builds", || build_page(&workspace, Source::Any));
     if let Some(page) = &page {
@@ -45,6 +48,6 @@ fn page_lints(workspace: &Workspace) -> Result<()> {
         println!("left out: the lints come with the installed compiler, which has no wasm32 target here");
         return Ok(());
     }
-    let page = ["clippy", "--package", "spokeshave-web"];
+    let page = ["clippy", "--profile", "page", "--package", "spokeshave-web"];
     run(workspace.cargo().args(page).args(target).args(["--", "--deny", "warnings"]))
 }
