@@ -124,6 +124,12 @@ const NEAR_ZERO_RAD: f64 = 1e-7;
 const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
+/// The most that lift and drag coefficients and their rises with the angle of attack (1/rad) add up to: what the steepest
+/// stall of the tables, 0.3 in half a degree, comes to with all the rest.
+const STEEPEST_SECTION: f64 = 45.0;
+/// The most that the rest of the residual rises or falls with φ, 1/rad: `sqrt(5.0² + 6.1²)` for the momentum terms of N and M with
+/// Prandtl's factor, whose own part is largest where `f = 0.8`.
+const STEEPEST_MOMENTUM: f64 = 7.9;
 /// Up to this share of the stall angle lift rises steeply.
 const STEEP: f64 = 0.75;
 /// Of the inflow angle (rad) and of the residual over `hypot(V, Ω r)`.
@@ -272,8 +278,10 @@ impl Element<'_> {
         reach: f64,
         residual: &impl Fn(f64) -> f64,
     ) -> Option<f64> {
+        let steepest = STEEPEST_MOMENTUM + self.solidity * STEEPEST_SECTION;
+        let onward = |(phi, value): (f64, f64)| stepped(phi, end, value.abs() / steepest);
         let mut here = start;
-        let mut next = if window == start.0 { stepped(start.0, end) } else { window };
+        let mut next = if window == start.0 { onward(start) } else { window };
         while here.0 != end && (self.angle_rad - here.0).abs() < reach {
             let there = (next, residual(next));
             if there.1 == 0.0 {
@@ -289,7 +297,7 @@ impl Element<'_> {
                 return find_root_brent(here.0, there.0, known, &mut rule).ok();
             }
             here = there;
-            next = stepped(here.0, end);
+            next = onward(here);
         }
         None
     }
@@ -317,14 +325,16 @@ impl Element<'_> {
 }
 
 /// One step from `phi` towards `end`; steps halve towards φ = 0.
-fn stepped(phi: f64, end: f64) -> f64 {
+///
+/// Where the residual cannot come to zero within `clear` (rad), the step is as long.
+fn stepped(phi: f64, end: f64, clear: f64) -> f64 {
     let towards_zero = end.abs() < phi.abs() && end.abs() <= NEAR_ZERO_RAD;
     if towards_zero && phi.abs() <= HALVING_RAD {
         let half = 0.5 * phi;
         return if half.abs() <= NEAR_ZERO_RAD { end } else { half };
     }
-    let step = STEP_RAD.copysign(end - phi);
-    if (end - phi).abs() <= STEP_RAD { end } else { phi + step }
+    let step = clear.max(STEP_RAD);
+    if (end - phi).abs() <= step { end } else { phi + step.copysign(end - phi) }
 }
 
 #[cfg(test)]
