@@ -76,6 +76,15 @@ impl Shaft {
         }
     }
 
+    /// Propeller rpm at idle, where one is given.
+    #[must_use]
+    pub fn idle_rpm(&self) -> Option<f64> {
+        match self {
+            Self::Piston(p) => p.data.idle_rpm.map(|rpm| rpm / p.data.gear_ratio),
+            Self::Electric(_) => None,
+        }
+    }
+
     /// Engine rpm over propeller rpm.
     #[must_use]
     pub fn gear_ratio(&self) -> f64 {

@@ -24,6 +24,7 @@ mod envelope;
 mod figures;
 mod full;
 mod held;
+mod idle;
 mod line;
 mod marks;
 mod matched;

@@ -39,6 +39,8 @@ fn each_wrong_value_is_named_by_its_path() {
         ("/engine/full_throttle/1/rpm", json!(1000), "engine.full_throttle[1].rpm: 1000"),
         ("/engine/full_throttle", json!([{"rpm": 2000, "power_w": 40_000}]), "engine.full_throttle: 1"),
         ("/engine/full_throttle/1/power_w", json!(0), "engine.full_throttle[1].power_w: 0"),
+        ("/engine/idle_rpm", json!(3400), "engine.idle_rpm: 3400"),
+        ("/engine/fuel_kg", json!(500), "engine.fuel_kg: 500"),
         ("/engine/gear_ratio", json!(0), "engine.gear_ratio: 0"),
         ("/aircraft/drag/cd0", json!(0), "aircraft.drag.cd0: 0"),
         ("/aircraft/mass_kg", json!(0), "aircraft.mass_kg: 0"),

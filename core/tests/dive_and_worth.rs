@@ -39,6 +39,29 @@ fn in_the_dive_the_propeller_freewheels_at_the_limit_rpm() {
     assert!(torque(0.99 * v, 3300.0) > 0.0 && torque(1.01 * v, 3300.0) < 0.0);
 }
 
+#[test]
+fn standing_at_idle_is_the_propeller_at_that_rpm_of_the_engine() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    (piston.idle_rpm, piston.gear_ratio) = (Some(1500.0), 1.5);
+    let thrust_n = |job: &Job, turn_deg: f64| {
+        let rig = Rig::new(job).unwrap();
+        let full = point(None, Setting::FullThrottle {});
+        let idle = envelope(&rig, &full, 12, &[]).unwrap().marks.idle.unwrap();
+        assert!(idle.airspeed_m_s == 0.0 && (idle.rpm - 1000.0).abs() < 1e-9, "{idle:?}");
+        let rotation_rad_s = rotation_rad_s(1000.0);
+        let turn_rad = f64::to_radians(turn_deg);
+        let at = Condition { air: air_of(&full).unwrap(), airspeed_m_s: 0.0, rotation_rad_s, turn_rad };
+        assert!((idle.value / rig.rotor.loads(&at).thrust_n - 1.0).abs() < 1e-9);
+        idle.value
+    };
+    let fixed = thrust_n(&job, 0.0);
+    // The governor holds nothing so slow: the blades are at the fine stop.
+    job.propeller.pitch_control =
+        PitchControl::ConstantSpeed { rpm: 2000.0, turn_min_deg: -4.0, turn_max_deg: 8.0 };
+    assert!(thrust_n(&job, -4.0) < fixed);
+}
+
 /// A freewheeling propeller turns at one advance ratio but for Reynolds and Mach numbers, so that the speed follows
 /// the limit rpm.
 #[test]

@@ -5,6 +5,7 @@ use super::dive::dive;
 use super::envelope::{Followed, stall_m_s};
 use super::figures::{full_throttle, level};
 use super::full::Full;
+use super::idle::idle;
 use super::trail::Trail;
 use super::{Solver, rpm_of};
 use crate::aircraft::propellers;
@@ -49,12 +50,8 @@ pub(super) fn marks(
             let airspeed_m_s = f.condition.airspeed_m_s;
             Mark { airspeed_m_s, rpm: told.rpm, value: told.thrust_n, held_at_limit: f.held }
         }),
-        closed_throttle_dive: dive(rig, at).map(|f| Mark {
-            airspeed_m_s: f.condition.airspeed_m_s,
-            rpm: rpm_of(&f.condition),
-            value: f.loads.thrust_n * rig.aircraft.as_ref().map_or(1.0, propellers),
-            held_at_limit: false,
-        }),
+        closed_throttle_dive: dive(rig, at).map(|f| driven(rig, &f)),
+        idle: idle(rig, at).map(|f| driven(rig, &f)),
         best_range: cruise(|l| l.range_m),
         best_endurance: cruise(|l| l.endurance_s),
         limit_rpm_from_m_s: passed(points, |f| if f.held_at_limit { 1.0 } else { -1.0 }),
@@ -65,6 +62,16 @@ pub(super) fn marks(
                 Some(TipMach { tip_mach: mach, airspeed_m_s })
             })
             .collect(),
+    }
+}
+
+/// Where the throttle is closed; the value is the thrust of all propellers.
+fn driven(rig: &Rig, f: &Full) -> Mark {
+    Mark {
+        airspeed_m_s: f.condition.airspeed_m_s,
+        rpm: rpm_of(&f.condition),
+        value: f.loads.thrust_n * rig.aircraft.as_ref().map_or(1.0, propellers),
+        held_at_limit: false,
     }
 }
 

@@ -14,6 +14,8 @@ const COARSEST_DEG: f64 = 25.0;
 /// Step of the first look, degrees, and how often it is halved round the best.
 const STEP_DEG: f64 = 2.5;
 const HALVINGS: u32 = 6;
+/// Steps without gain after which a side is given up.
+const MOST_VAIN: u32 = 4;
 
 /// What turning the blades would gain at a flight point: at a throttle setting or a power in thrust, at top speed in
 /// speed, in level flight in shaft power. The engine is held at its limit rpm where it would pass it. The blades are
@@ -97,7 +99,8 @@ fn highest(value: &dyn Fn(f64) -> Option<f64>) -> Option<(f64, f64)> {
 /// A turn of the blades and the value there.
 type Turned = (f64, f64);
 
-/// The best by equal steps from where the blades stand towards an end, given up after two steps that gain nothing.
+/// The best by equal steps from where the blades stand towards an end, given up after four steps that gain nothing:
+/// a blade that stands stalled may first get worse.
 fn uphill(known: &dyn Fn(f64) -> Option<Turned>, stands: Option<Turned>, end_deg: f64) -> Option<Turned> {
     let steps = (end_deg.abs() / STEP_DEG).round() as u32;
     let (mut best, mut vain) = (stands, 0);
@@ -107,7 +110,7 @@ fn uphill(known: &dyn Fn(f64) -> Option<Turned>, stands: Option<Turned>, end_deg
             _ if best.is_some() => vain += 1,
             _ => {}
         }
-        if vain == 2 {
+        if vain == MOST_VAIN {
             break;
         }
     }

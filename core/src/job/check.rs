@@ -39,7 +39,7 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
         check_aircraft(&mut found, aircraft, job.propeller.diameter_m);
     }
     match &job.engine {
-        Some(Engine::Piston(piston)) => check_piston(&mut found, piston),
+        Some(Engine::Piston(piston)) => check_piston(&mut found, piston, job.aircraft.as_ref()),
         Some(Engine::Electric(electric)) => check_electric(&mut found, electric),
         None => {}
     }

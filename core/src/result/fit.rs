@@ -46,6 +46,17 @@ pub struct Envelope {
     pub marks: Marks,
 }
 
+impl Envelope {
+    /// First and last speed (m/s) of the range at which full throttle cannot turn the propeller at any rpm of the engine's
+    /// power curve; `None` where there is no such speed.
+    #[must_use]
+    pub fn too_slow_to_turn_m_s(&self) -> Option<(f64, f64)> {
+        let mut there = self.points.iter().filter(|p| p.full_state == State::EngineCannotTurnIt);
+        let first = there.next()?;
+        Some((first.airspeed_m_s, there.next_back().unwrap_or(first).airspeed_m_s))
+    }
+}
+
 /// One speed of an envelope.
 #[derive(Clone, Debug, PartialEq, Serialize)]
 pub struct EnvelopePoint {
@@ -147,6 +158,8 @@ pub struct Marks {
     /// driving nor braking (an engine that brakes allows more speed); the value is the propellers' thrust, N, below
     /// zero. What the airframe allows is another limit.
     pub closed_throttle_dive: Option<Mark>,
+    /// Standing at the engine's idle rpm; the value is the thrust of all propellers, N.
+    pub idle: Option<Mark>,
     /// Speed from which full throttle would pass the engine's limit rpm or the end of its curve, m/s.
     pub limit_rpm_from_m_s: Option<f64>,
     /// Speeds at which the tip at full throttle passes the Mach numbers of [`TIP_MACHS`], m/s, each where it is

@@ -1,10 +1,23 @@
 //! How far the limits of the finished propeller are kept.
 
-use super::brief::Look;
+use super::brief::{Look, look};
+use crate::fit::Near;
 use crate::job::{FlightPoint, Limits, Setting};
 use crate::result::{Brief, Limit, Margin};
 use crate::rig::Rig;
 use crate::wood::{BladeBeam, least_margin_like};
+
+/// How far the drawn blade keeps the limits of the job's wishes and, in level flight, those of its engine: one margin for
+/// each limit and flight point.
+#[must_use]
+pub fn kept(rig: &Rig) -> Vec<Margin> {
+    let none = Limits::default();
+    let limits = rig.job.wishes.as_ref().map_or(&none, |wishes| &wishes.limits);
+    let at = |point: &FlightPoint| look(rig, point, &mut Near::default());
+    let looked_at: Vec<Look> = rig.job.flight_points.iter().map(at).collect();
+    let standing = standing(rig, limits).map(|point| at(&point).brief);
+    margins(rig, limits, &looked_at, standing.as_ref(), beam(rig, limits).as_ref())
+}
 
 /// The flight point of the standing limit: the air of the first flight point, at rest, full throttle.
 pub(super) fn standing(rig: &Rig, limits: &Limits) -> Option<FlightPoint> {

@@ -20,6 +20,7 @@ pub use chart::{MOST_CHART_STEPS, PitchBy, pitch_diameter, sized};
 pub use cost::error_costs;
 pub use error::ShapeError;
 pub use least_loss::{Lift, LossTask, least_loss};
+pub use limits::kept;
 pub use search::{FREE, Listener, Progress, Wish, search, usual_aims};
 pub use twist::{TwistBy, twist, twist_by};
 

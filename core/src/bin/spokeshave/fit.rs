@@ -4,8 +4,10 @@ mod limits;
 mod rows;
 mod text;
 
-use spokeshave::result::{Fit, Mark, State};
+use serde::Serialize;
+use spokeshave::result::{Fit, Margin, Mark, State};
 use spokeshave::rig::Rig;
+use spokeshave::shape;
 
 use crate::input::{Format, JobSource, Outcome, PointOf, print, print_csv, print_json};
 use crate::table::csv_figure;
@@ -41,14 +43,23 @@ pub(crate) fn run(args: &Args) -> Outcome {
     if !args.format.csv {
         fit.pitch_worth = rig.pitch_worth();
     }
+    let limits = shape::kept(&rig);
     if args.format.json {
-        print_json(&fit)?;
+        print_json(&Told { fit, limits })?;
     } else if args.format.csv {
         print_csv(&CSV, fit.envelope.points.iter().map(csv_row))?;
     } else {
-        print(&text(&fit))?;
+        print(&text(&fit, &limits))?;
     }
     Ok(true)
+}
+
+/// The fit with the limits of the job's wishes and of its engine.
+#[derive(Serialize)]
+struct Told {
+    #[serde(flatten)]
+    fit: Fit,
+    limits: Vec<Margin>,
 }
 
 /// Headings of the figures that decide, one row a job.

@@ -1,12 +1,15 @@
 //! What is allowed of an engine.
 
-use super::super::document::{AltitudeLaw, Electric, Piston};
+use super::super::document::{Aircraft, AltitudeLaw, Electric, Piston};
 use super::super::found::Found;
 use crate::air::HIGHEST_M;
 
 const MOST_LOADS: usize = 50;
 
-pub(super) fn check_piston(found: &mut Found, p: &Piston) {
+/// Fuel on board is part of an aircraft's mass.
+const MOST_FUEL_SHARE: f64 = 0.9;
+
+pub(super) fn check_piston(found: &mut Found, p: &Piston, aircraft: Option<&Aircraft>) {
     let at = |name: &str| format!("engine.{name}");
     found.count("engine.full_throttle", p.full_throttle.len(), 2..=200);
     for (i, point) in p.full_throttle.iter().enumerate() {
@@ -23,10 +26,17 @@ pub(super) fn check_piston(found: &mut Found, p: &Piston) {
     }
     found.range(at("gear_ratio"), p.gear_ratio, 0.1..=20.0, "");
     found.optional(at("max_rpm"), p.max_rpm, 100.0..=60_000.0, "rpm");
-    found.optional(at("idle_rpm"), p.idle_rpm, 50.0..=20_000.0, "rpm");
+    let last = p.full_throttle.last().map_or(20_000.0, |f| f.rpm);
+    let most = p.max_rpm.map_or(last, |limit| limit.min(last)).clamp(50.0, 20_000.0);
+    found.optional(at("idle_rpm"), p.idle_rpm, 50.0..=most, "rpm");
     found.optional(at("bsfc_kg_per_kwh"), p.bsfc_kg_per_kwh, 0.05..=3.0, "kg per kWh");
     check_loads(found, p);
-    found.optional(at("fuel_kg"), p.fuel_kg, 0.0..=50_000.0, "kg");
+    let mass_kg = aircraft.map(|a| match a {
+        Aircraft::Aeroplane(a) => a.mass_kg,
+        Aircraft::Multirotor(m) => m.mass_kg,
+    });
+    let most_fuel = mass_kg.map_or(50_000.0, |m| (MOST_FUEL_SHARE * m).clamp(0.0, 50_000.0));
+    found.optional(at("fuel_kg"), p.fuel_kg, 0.0..=most_fuel, "kg, part of the aircraft's mass");
     if let AltitudeLaw::HeldTo(held) = &p.altitude_law {
         found.range(at("altitude_law.altitude_m"), held.altitude_m, 0.0..=HIGHEST_M, "m");
     }

@@ -191,9 +191,16 @@ impl EngineChoice {
     }
 }
 
-/// An engine of a kind to start from, an example's.
+/// An engine of a kind to start from, an example's; without its fuel where the aircraft could not carry that.
 fn started(kind: EngineKind, job: &Job) -> Option<Engine> {
-    example_of(job, |example| example.engine.filter(|e| EngineKind::of(Some(e)) == kind))
+    let mut engine = example_of(job, |example| example.engine.filter(|e| EngineKind::of(Some(e)) == kind));
+    let fits = |engine: &Option<Engine>| Job { engine: engine.clone(), ..job.clone() }.check().is_empty();
+    if !fits(&engine)
+        && let Some(Engine::Piston(p)) = &mut engine
+    {
+        p.fuel_kg = None;
+    }
+    engine
 }
 
 /// A row on the curve halfway to the next one; after the last one as far on as that lies from the one before.

@@ -1,6 +1,6 @@
 //! A plain sentence for each limit.
 
-use spokeshave::result::{Envelope, State as Answer};
+use spokeshave::result::Envelope;
 use yew::prelude::*;
 
 use crate::number::{fixed, with_unit};
@@ -27,6 +27,7 @@ fn sentences(props: &LimitsProps) -> Vec<String> {
     let mut said = vec![rpm(props)];
     said.extend(stall(props));
     said.extend(dive(props));
+    said.extend(idle(props));
     for tip in &envelope.marks.tip_mach_from {
         let mach = fixed(tip.tip_mach, 2);
         said.push(if tip.airspeed_m_s > 0.0 {
@@ -60,9 +61,11 @@ fn rpm(props: &LimitsProps) -> String {
         Some(_) => {
             format!("Even at rest full throttle takes the engine past {limit}: it has to be throttled back.")
         }
-        None if envelope.points.iter().any(|p| p.full_state == Answer::EngineCannotTurnIt) => {
-            "At some speeds the engine cannot turn this propeller at any rpm of its curve.".into()
-        }
+        None if let Some((from, to)) = envelope.too_slow_to_turn_m_s() => format!(
+            "From {} to {} full throttle cannot turn this propeller at any rpm of the engine's power curve: no figures there.",
+            speed(from),
+            speed(to)
+        ),
         None => format!("Full throttle keeps the engine below {limit} over the whole speed range shown."),
     }
 }
@@ -74,6 +77,15 @@ fn dive(props: &LimitsProps) -> Option<String> {
          brakes. The airframe's own limit may come first.",
         with_unit(props.units, Quantity::Rpm, Some(dive.rpm)),
         with_unit(props.units, Quantity::Speed, Some(dive.airspeed_m_s))
+    ))
+}
+
+fn idle(props: &LimitsProps) -> Option<String> {
+    let idle = props.envelope.marks.idle?;
+    Some(format!(
+        "Standing at idle, {}, it pulls {}: brakes and chocks have to hold that.",
+        with_unit(props.units, Quantity::Rpm, Some(idle.rpm)),
+        with_unit(props.units, Quantity::Force, Some(idle.value))
     ))
 }
 

@@ -1,11 +1,12 @@
 //! A plain sentence for each limit of a fit.
 
-use spokeshave::result::Fit;
+use spokeshave::result::{Fit, Margin};
 
-/// A plain sentence for each limit.
-pub(super) fn limits(fit: &Fit) -> Vec<String> {
+/// A plain sentence for each limit; of those of the wishes and the engine only what is broken.
+pub(super) fn limits(fit: &Fit, kept: &[Margin]) -> Vec<String> {
     let m = &fit.envelope.marks;
-    let mut said = Vec::new();
+    let broken = kept.iter().filter(|m| m.share < 0.0 && m.found.is_some());
+    let mut said: Vec<String> = broken.map(Margin::sentence).collect();
     if let Some(stall) = fit.envelope.speeds.and_then(|s| s.stall_m_s) {
         said.push(format!(
             "The stall is at {:.0} km/h; level flight and climb count from there on.",
@@ -37,6 +38,12 @@ pub(super) fn limits(fit: &Fit) -> Vec<String> {
             3.6 * d.airspeed_m_s
         ));
     }
+    if let Some(idle) = m.idle {
+        said.push(format!(
+            "Standing at idle, {:.0} rpm, it pulls {:.0} N: brakes and chocks have to hold that.",
+            idle.rpm, idle.value
+        ));
+    }
     if fit.standing_crossings.len() > 1 {
         said.push(format!(
             "At rest engine and propeller agree at {} rpm; the highest stable one counts.",
@@ -46,9 +53,20 @@ pub(super) fn limits(fit: &Fit) -> Vec<String> {
     if m.limit_rpm_from_m_s.is_none() && m.tip_mach_from.is_empty() {
         said.push("Neither the limit rpm nor a tip Mach number of note is passed in this range.".into());
     }
+    said.extend(gap(fit));
     said.push(
         "Estimates at this mass, without reserve, wind or slope; keep to the handbook and to local rules."
             .into(),
     );
     said
+}
+
+/// Speeds between which the engine cannot turn the propeller at any rpm of its power curve.
+fn gap(fit: &Fit) -> Option<String> {
+    let (from, to) = fit.envelope.too_slow_to_turn_m_s()?;
+    Some(format!(
+        "From {:.0} to {:.0} km/h full throttle cannot turn this propeller at any rpm of the engine's power curve: no figures there.",
+        3.6 * from,
+        3.6 * to
+    ))
 }

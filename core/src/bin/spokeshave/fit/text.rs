@@ -1,11 +1,11 @@
 //! The fit told for people.
 
-use spokeshave::result::{EnvelopePoint, Fit, Mark, PitchWorth, WorthOf};
+use spokeshave::result::{EnvelopePoint, Fit, Margin, Mark, PitchWorth, WorthOf};
 
 use super::limits::limits;
 use crate::table::{figure, signed, table};
 
-pub(super) fn text(fit: &Fit) -> String {
+pub(super) fn text(fit: &Fit, limits_kept: &[Margin]) -> String {
     let air = format!(
         "{}\nat the air of {}: {:.0} m, {} K from standard, {:.3} kg/m³\n\n",
         fit.title,
@@ -31,7 +31,7 @@ pub(super) fn text(fit: &Fit) -> String {
     air + &verdict_table(fit)
         + "\n\n"
         + &worth_table(&fit.pitch_worth)
-        + &limits(fit).join("\n")
+        + &limits(fit, limits_kept).join("\n")
         + "\n\n"
         + &table(&header, rows)
 }
