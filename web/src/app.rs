@@ -7,7 +7,7 @@ use gloo_events::EventListener;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::Along;
 use spokeshave::job::Job;
-use spokeshave::result::{Ceilings, Envelope, Logged, PitchWorth, PointResult, TakeOff};
+use spokeshave::result::{Ceilings, Envelope, Logged, Margin, PitchWorth, PointResult, TakeOff};
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
 use wasm_bindgen::JsCast;
@@ -130,6 +130,8 @@ pub struct Later {
     pub offer: Rc<Offered>,
     /// The speed range in its air; not there while the Fit panel is closed.
     pub envelope: Option<Rc<Option<Envelope>>>,
+    /// How far every limit is kept.
+    pub margins: Rc<Vec<Margin>>,
     /// Take-off there.
     pub take_off: Option<TakeOff>,
     /// Ceilings, which follow last.

@@ -53,7 +53,9 @@ pub enum Piece {
     Carved,
     /// The logbook.
     Logbook,
-    /// Showing the flight points.
+    /// How far every limit is kept.
+    Limits,
+    /// Showing the flight points and the limits.
     Show,
     /// Showing the map and the curves as well.
     ShowMap,
@@ -66,7 +68,7 @@ impl Plan {
     #[must_use]
     pub fn pieces(self) -> Vec<Piece> {
         let mut pieces: Vec<Piece> = (0..self.count).map(Piece::Point).collect();
-        pieces.push(Piece::Show);
+        pieces.extend([Piece::Limits, Piece::Show]);
         if !self.dragging {
             pieces.extend([Piece::Map, Piece::Curves, Piece::ShowMap]);
             pieces.extend(self.opened.engine.then_some(Piece::Offer));
@@ -148,6 +150,7 @@ impl Bench {
         let mut results = self.results.borrow_mut();
         match piece {
             Piece::Point(i) => drop(results.point(i)),
+            Piece::Limits => drop(results.margins()),
             Piece::Curves => drop(results.curves(self.plan.point)),
             Piece::Map => drop(results.map(self.plan.point, self.plan.along)),
             Piece::Offer => drop(results.offer(self.plan.point)),
@@ -170,7 +173,7 @@ impl Bench {
         let point = self.plan.point;
         let points = (0..self.plan.count).map(|i| results.point(i)).collect();
         let rig = results.rig().map(RigRef);
-        let mut now = Later { rig, point, points, ..Later::clone(&self.before) };
+        let mut now = Later { rig, point, points, margins: results.margins(), ..Later::clone(&self.before) };
         if so_far == Piece::Show {
             return now;
         }
@@ -200,9 +203,9 @@ mod tests {
     fn the_map_waits_until_a_drag_is_over() {
         let plan =
             Plan { count: 2, point: 0, dragging: true, along: Along::default(), opened: Opened::default() };
-        assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Show]);
+        assert_eq!(plan.pieces(), [Piece::Point(0), Piece::Point(1), Piece::Limits, Piece::Show]);
         let all = Plan { dragging: false, ..plan }.pieces();
-        assert_eq!(all[3..], [Piece::Map, Piece::Curves, Piece::ShowMap]);
+        assert_eq!(all[4..], [Piece::Map, Piece::Curves, Piece::ShowMap]);
     }
 
     #[test]

@@ -6,14 +6,15 @@ use std::rc::Rc;
 use spokeshave::carved;
 use spokeshave::drawn::{DrawnStation, stations};
 use spokeshave::fit::{self, Along, Offer};
-use spokeshave::job::{Carved, Factors, FlightPoint, Job, Logbook, Wood};
+use spokeshave::job::{Carved, Factors, FlightPoint, Job, Logbook, Wishes, Wood};
 use spokeshave::logbook;
 use spokeshave::result::{
-    Carved as CarvedResult, Ceilings, Crossing, Envelope, Logged, PitchWorth, PointResult, RemovalPlan,
-    SectionPoint, Strength, TakeOff,
+    Carved as CarvedResult, Ceilings, Crossing, Envelope, Logged, Margin, PitchWorth, PointResult,
+    RemovalPlan, SectionPoint, Strength, TakeOff,
 };
 use spokeshave::rig::Rig;
 use spokeshave::rotor::{CurvePoint, DepartureMap};
+use spokeshave::shape;
 use spokeshave::wood::{WoodError, strength};
 
 /// Speeds and radii of the departure map.
@@ -77,6 +78,8 @@ pub struct CarvedFound {
     pub plan: Result<RemovalPlan, String>,
 }
 
+/// The limits, what stress asks, and all flight points.
+type LimitsKey = (Option<Wishes>, Option<Wood>, Vec<FlightPoint>);
 /// The readings of the blades with the flight points they are judged at.
 type CarvedKey = (Vec<FlightPoint>, Option<Carved>, usize);
 /// The readings of the logbook with those of the blades that were flown.
@@ -99,6 +102,7 @@ pub struct Results {
     worth: Shelf<Vec<FlightPoint>, Vec<PitchWorth>>,
     /// By the wood and all flight points.
     strengths: Shelf<(Option<Wood>, Vec<FlightPoint>), Sheet>,
+    margins: Shelf<LimitsKey, Vec<Margin>>,
     sections: Shelf<(FlightPoint, usize), Vec<SectionPoint>>,
     carved: Shelf<CarvedKey, Result<CarvedFound, String>>,
     logged: Shelf<LoggedKey, Result<Logged, String>>,
@@ -187,6 +191,14 @@ impl Results {
     #[must_use]
     pub fn worth(&self) -> Rc<Vec<PitchWorth>> {
         self.rig.as_ref().and_then(|rig| self.worth.known(&rig.job.flight_points)).unwrap_or_default()
+    }
+
+    /// How far every limit is kept.
+    pub fn margins(&mut self) -> Rc<Vec<Margin>> {
+        let Some(rig) = self.rig.clone() else { return Rc::default() };
+        let job = &rig.job;
+        let key = (job.wishes.clone(), job.wood.clone(), job.flight_points.clone());
+        self.margins.get(&key, || shape::kept(&rig))
     }
 
     /// Works out the strength of the blade.

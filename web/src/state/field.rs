@@ -7,7 +7,7 @@ use super::machine::{AircraftFigure, EngineFigure, WoodFigure};
 use super::measure::{Measure, write_station};
 use super::point_figure::PointFigure;
 use super::readings::{BladeFigure, LogFigure};
-use super::wishes::LimitFigure;
+use super::wishes::{LimitFigure, RpmBound};
 use crate::units::Quantity;
 
 /// One figure of a job.
@@ -43,6 +43,8 @@ pub enum Field {
     Engine(EngineFigure),
     /// A limit of the finished propeller.
     Limit(LimitFigure),
+    /// A limit of rpm at a flight point.
+    PointRpm(usize, RpmBound),
     /// A figure of the wood.
     Wood(WoodFigure),
     /// A figure measured on a blade at a station.
@@ -58,7 +60,7 @@ impl Field {
         match self {
             Self::Blades | Self::Elements => Quantity::Count,
             Self::Title | Self::Point(_, PointFigure::Name) => Quantity::Number,
-            Self::GovernedRpm => Quantity::Rpm,
+            Self::GovernedRpm | Self::PointRpm(..) => Quantity::Rpm,
             Self::Blockage => Quantity::Share,
             Self::Turn
             | Self::FineStop
@@ -96,10 +98,8 @@ impl Field {
             Self::CoarseStop => "coarse stop".into(),
             Self::Blockage => "air slowed by the body behind".into(),
             Self::Station(i, measure) => format!("{} at station {}", measure.name(), i + 1),
-            Self::Point(i, figure) => {
-                let name = job.flight_points.get(i).map_or("", |p| p.name.as_str());
-                format!("{} of {name}", figure.name())
-            }
+            Self::Point(i, figure) => of_point(job, i, figure.name()),
+            Self::PointRpm(i, bound) => of_point(job, i, bound.name()),
             Self::Elements => "number of elements".into(),
             Self::Aircraft(figure) => figure.name().into(),
             Self::Engine(figure) => figure.name(),
@@ -131,6 +131,7 @@ impl Field {
             Self::Aircraft(figure) => figure.path(),
             Self::Engine(figure) => figure.path(),
             Self::Limit(figure) => figure.path(),
+            Self::PointRpm(i, bound) => bound.path(job, i),
             Self::Wood(figure) => figure.path(),
             Self::Reading(blade, station, figure) => {
                 let i = BladeFigure::index(job, blade, station);
@@ -159,6 +160,7 @@ impl Field {
             (Self::Aircraft(figure), _) => figure.value(job),
             (Self::Engine(figure), _) => figure.value(job),
             (Self::Limit(figure), _) => figure.value(job),
+            (Self::PointRpm(i, bound), _) => bound.value(job, i),
             (Self::Wood(figure), _) => figure.value(job),
             (Self::Reading(blade, station, figure), _) => figure.value(job, blade, station),
             (Self::Log(i, figure), _) => figure.value(job, i),
@@ -220,6 +222,7 @@ impl Field {
             (Self::Aircraft(figure), _) => return figure.write(job, value),
             (Self::Engine(figure), _) => return figure.write(job, value),
             (Self::Limit(figure), _) => figure.write(job, value),
+            (Self::PointRpm(i, bound), _) => return bound.write(job, i, Some(value)),
             (Self::Wood(figure), _) => return figure.write(job, value),
             (Self::Reading(blade, station, figure), _) => return figure.write(job, blade, station, value),
             (Self::Log(i, figure), _) => return figure.write(job, i, value),
@@ -244,12 +247,17 @@ impl Field {
                 figure.clear(job);
                 true
             }
+            Self::PointRpm(i, bound) => bound.write(job, i, None),
             Self::Wood(figure) => figure.clear(job),
             Self::Reading(blade, station, figure) => figure.clear(job, blade, station),
             Self::Log(i, figure) => figure.clear(job, i),
             _ => false,
         }
     }
+}
+
+fn of_point(job: &Job, i: usize, what: &str) -> String {
+    format!("{what} of {}", job.flight_points.get(i).map_or("", |p| p.name.as_str()))
 }
 
 /// A whole number; 0, which nothing allows, for what is none.

@@ -43,7 +43,7 @@ pub use opened::{Opened, Part};
 pub use point_figure::PointFigure;
 pub use readings::{BladeFigure, CarvedChoice, LogFigure, LogbookChoice};
 pub use variant::{Beside, Variant, Variants};
-pub use wishes::LimitFigure;
+pub use wishes::{LimitFigure, RpmBound};
 
 use notice::refused;
 

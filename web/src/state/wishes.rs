@@ -1,6 +1,6 @@
 //! Limits of the finished propeller, as a search has them.
 
-use spokeshave::job::{Job, Limits, Wishes};
+use spokeshave::job::{Job, Limits, RpmLimit, Wishes};
 
 use crate::units::Quantity;
 
@@ -110,4 +110,88 @@ impl LimitFigure {
 /// Wishes that say something.
 pub(super) fn some(wishes: Wishes) -> Option<Wishes> {
     (wishes != Wishes::default()).then_some(wishes)
+}
+
+/// One of the two limits of rpm that a flight point may have of its own.
+#[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord)]
+pub enum RpmBound {
+    /// Least.
+    Least,
+    /// Greatest.
+    Most,
+}
+
+impl RpmBound {
+    /// What it is called.
+    #[must_use]
+    pub fn name(self) -> &'static str {
+        match self {
+            Self::Least => "least rpm",
+            Self::Most => "greatest rpm",
+        }
+    }
+
+    fn of(self, limit: &mut RpmLimit) -> &mut Option<f64> {
+        match self {
+            Self::Least => &mut limit.least,
+            Self::Most => &mut limit.most,
+        }
+    }
+
+    /// Its path in the job file.
+    pub(super) fn path(self, job: &Job, point: usize) -> String {
+        let i = place(job, point).unwrap_or_default();
+        format!("wishes.limits.rpm[{i}].{}", if self == Self::Least { "least" } else { "most" })
+    }
+
+    /// The limit at a flight point, rpm.
+    #[must_use]
+    pub fn value(self, job: &Job, point: usize) -> Option<f64> {
+        let i = place(job, point)?;
+        *self.of(&mut job.wishes.as_ref()?.limits.rpm.get(i)?.clone())
+    }
+
+    /// Writes the limit at a flight point, rpm, or takes it out; whether there is such a point.
+    pub(super) fn write(self, job: &mut Job, point: usize, value: Option<f64>) -> bool {
+        let Some(flight_point) = job.flight_points.get(point).map(|p| p.name.clone()) else { return false };
+        let found = place(job, point);
+        let mut wishes = job.wishes.take().unwrap_or_default();
+        let all = &mut wishes.limits.rpm;
+        let i = found.unwrap_or_else(|| {
+            all.push(RpmLimit { flight_point, least: None, most: None });
+            all.len() - 1
+        });
+        *self.of(&mut all[i]) = value;
+        all.retain(|limit| limit.least.is_some() || limit.most.is_some());
+        job.wishes = some(wishes);
+        true
+    }
+}
+
+/// Where the limits of a flight point stand.
+fn place(job: &Job, point: usize) -> Option<usize> {
+    let name = &job.flight_points.get(point)?.name;
+    job.wishes.as_ref()?.limits.rpm.iter().position(|limit| limit.flight_point == *name)
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use spokeshave::job::DEMOS;
+
+    #[test]
+    fn a_limit_of_rpm_comes_and_goes_with_its_flight_point() {
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        job.wishes = None;
+        assert!(RpmBound::Most.write(&mut job, 1, Some(3100.0)));
+        assert!(RpmBound::Least.write(&mut job, 2, Some(2300.0)));
+        assert_eq!(job.check(), vec![]);
+        assert_eq!(RpmBound::Most.value(&job, 1), Some(3100.0));
+        assert_eq!(RpmBound::Most.value(&job, 2), None);
+        assert_eq!(RpmBound::Least.path(&job, 2), "wishes.limits.rpm[1].least");
+        assert!(RpmBound::Most.write(&mut job, 1, None));
+        assert!(RpmBound::Least.write(&mut job, 2, None));
+        assert_eq!(job.wishes, None);
+        assert!(!RpmBound::Most.write(&mut job, 99, Some(3000.0)));
+    }
 }

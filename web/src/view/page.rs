@@ -2,7 +2,7 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::Aircraft;
+use spokeshave::job::{Aircraft, Limits};
 use yew::prelude::*;
 
 use super::bench::{self, BenchPanel};
@@ -24,7 +24,7 @@ use super::room::{Room, use_room};
 use super::sections::{self, Sections};
 use super::shape::{self, ShapePanel};
 use super::steps::Steps;
-use super::verdict::Verdict;
+use super::verdict::{Against, Verdict};
 use super::workshop::Workshop;
 use super::{Seen, caution, use_act};
 use crate::app::{Later, Now};
@@ -56,7 +56,7 @@ pub fn Page(props: &PageProps) -> Html {
             if let Some(notice) = &state.notice { <Said notice={notice.clone()} /> }
             <main>
                 if narrow { <Lying ..props.clone() /> }
-                if let Some(result) = &*now.point { <Verdict result={result.clone()} units={state.units} beside={now.beside.clone()} /> }
+                if let Some(result) = &*now.point { <Verdict result={result.clone()} units={state.units} against={against(props)} margins={props.later.margins.clone()} beside={now.beside.clone()} /> }
                 <div class="sheet" style={format!("--chip-rows: {}", chip_rows(props))}>
                     if !narrow { <Standing ..props.clone() /> }
                     <div class="work">
@@ -148,6 +148,11 @@ fn Panels(props: &PageProps) -> Html {
             </Panel>
         </>
     }
+}
+
+fn against(props: &PageProps) -> Against {
+    let limits = props.state.job().wishes.as_ref().map_or_else(Limits::default, |w| w.limits.clone());
+    Against { limits, engine_rpm: limit_rpm(&props.later) }
 }
 
 fn limit_rpm(later: &Later) -> Option<f64> {

@@ -35,6 +35,7 @@ fn cells(sheet: &Strength, units: Units) -> [Cell; 4] {
             figure: g.map_or_else(|| NO_FIGURE.into(), |g| signed(100.0 * g.margin, 0)),
             unit: "%",
             more: g.map_or_else(|| "no load known".into(), |g| format!("{} in {}", place(g.station), g.case)),
+            gauge: None,
         },
         Cell {
             name: "Tip bends forward",
@@ -45,18 +46,21 @@ fn cells(sheet: &Strength, units: Units) -> [Cell; 4] {
                     f.tip_twist_deg.map_or_else(String::new, |t| format!(", twists {}°", signed(t, 1)));
                 format!("in {}{twist}", case.name)
             }),
+            gauge: None,
         },
         Cell {
             name: "All blades without the boss",
             figure: significant(units.shown(Quantity::Mass, mass.blades_kg), 3),
             unit: units.symbol(Quantity::Mass),
             more: format!("centre {} from the axis", with_unit(units, Quantity::Length, Some(mass.centre_m))),
+            gauge: None,
         },
         Cell {
             name: "Static moment of one blade",
             figure: fixed(1e3 * mass.static_moment_kg_m, if mass.static_moment_kg_m < 0.01 { 2 } else { 1 }),
             unit: "kg mm",
             more: format!("inertia of all {} kg m²", significant(mass.inertia_kg_m2, 3)),
+            gauge: None,
         },
     ]
 }

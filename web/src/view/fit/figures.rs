@@ -40,6 +40,7 @@ fn cells(props: &FiguresProps) -> Vec<Cell> {
         figure: figure(units, Quantity::Rpm, standing.map(|s| s.rpm)),
         unit: units.symbol(Quantity::Rpm),
         more: format!("thrust {}", with_unit(units, Quantity::Force, standing.map(|s| s.thrust_n))),
+        gauge: None,
     }];
     if aeroplane {
         cells.push(take_off(units, props.take_off));
@@ -70,6 +71,7 @@ fn take_off(units: Units, take_off: Option<TakeOff>) -> Cell {
         figure: figure(units, Quantity::Height, take_off.map(|t| t.ground_roll_m)),
         unit: units.symbol(Quantity::Height),
         more,
+        gauge: None,
     }
 }
 
@@ -88,6 +90,7 @@ fn ceiling(units: Units, ceilings: Option<Ceilings>) -> Cell {
         figure: figure(units, Quantity::Height, ceilings.and_then(|c| c.service_m)),
         unit: units.symbol(Quantity::Height),
         more,
+        gauge: None,
     }
 }
 
@@ -106,7 +109,13 @@ fn at(units: Units, mark: Option<Mark>) -> String {
 
 fn marked(units: Units, name: &'static str, quantity: Quantity, mark: Option<Mark>) -> Cell {
     let value = mark.map(|m| m.value);
-    Cell { name, figure: figure(units, quantity, value), unit: units.symbol(quantity), more: at(units, mark) }
+    Cell {
+        name,
+        figure: figure(units, quantity, value),
+        unit: units.symbol(quantity),
+        more: at(units, mark),
+        gauge: None,
+    }
 }
 
 fn speed(units: Units, name: &'static str, mark: Option<Mark>) -> Cell {
@@ -119,6 +128,7 @@ fn speed(units: Units, name: &'static str, mark: Option<Mark>) -> Cell {
         figure: figure(units, Quantity::Speed, mark.map(|m| m.airspeed_m_s)),
         unit: units.symbol(Quantity::Speed),
         more,
+        gauge: None,
     }
 }
 
@@ -134,7 +144,7 @@ fn long(
     } else {
         "no level flight, or nothing on board to run on".into()
     };
-    Cell { name, figure, unit, more }
+    Cell { name, figure, unit, more, gauge: None }
 }
 
 /// Hours and minutes.

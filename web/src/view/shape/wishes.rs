@@ -7,7 +7,7 @@ use yew::prelude::*;
 use super::figures::{ALL, name};
 use crate::app::RigRef;
 use crate::number::fixed;
-use crate::state::{Action, Choice, Field, LimitFigure, Running};
+use crate::state::{Action, Choice, Field, LimitFigure, RpmBound, Running};
 use crate::view::form::{Labelled, Pick, Shown, Switch, capital};
 use crate::view::{Act, Seen, use_act};
 
@@ -33,6 +33,7 @@ pub(super) fn WishBoxes(props: &WishBoxesProps) -> Html {
     let limits = LimitFigure::ALL.into_iter().map(|figure| {
         html! { <Labelled shown={Shown::of(state, &[], Field::Limit(figure))} label={capital(figure.name())} hint="no limit" /> }
     });
+    let at_points = state.job().flight_points.iter().enumerate().map(|(i, point)| rpm_row(state, i, point));
     let none = Wishes::default();
     let wishes = state.job().wishes.as_ref().unwrap_or(&none);
     let held = HELD.into_iter().map(|(what, label)| {
@@ -40,11 +41,12 @@ pub(super) fn WishBoxes(props: &WishBoxesProps) -> Html {
         html! { <Switch {label} on={wishes.held.contains(&what)} {onswitch} /> }
     });
     html! {
-        <details class="wishes unprinted">
+        <details id="wishes" class="wishes unprinted">
             <summary>{ "What counts, limits, what stays as drawn" }</summary>
             <div class="wish-grid">
                 <fieldset><legend>{ "What counts" }</legend>{ for points }</fieldset>
                 <fieldset><legend>{ "Limits of the finished propeller" }</legend><div class="settings">{ for limits }</div></fieldset>
+                <fieldset class="rpm-by-point"><legend>{ "Propeller rpm at each flight point" }</legend><div class="settings">{ for at_points }</div></fieldset>
                 <fieldset class="held"><legend>{ "The search leaves as drawn" }</legend>{ for held }</fieldset>
             </div>
         </details>
@@ -100,6 +102,14 @@ fn point_row(act: &Act, point: &FlightPoint, aims: &[Aim]) -> Html {
             }
         </div>
     }
+}
+
+/// The rpm allowed at a flight point.
+fn rpm_row(state: &Seen, i: usize, point: &FlightPoint) -> Html {
+    let boxes = [(RpmBound::Least, "at least"), (RpmBound::Most, "at most")].map(|(bound, label)| {
+        html! { <Labelled shown={Shown::of(state, &[], Field::PointRpm(i, bound))} label={format!("{}, {label}", point.name)} hint="no limit" /> }
+    });
+    html! { <>{ for boxes }</> }
 }
 
 fn picked_of(act: &Act, choices: Vec<Vec<Aim>>) -> Callback<usize> {
