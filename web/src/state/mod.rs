@@ -18,6 +18,8 @@ mod tests;
 #[cfg(test)]
 mod tests_machine;
 #[cfg(test)]
+mod tests_readings;
+#[cfg(test)]
 mod tests_wood;
 pub mod variant;
 pub mod wishes;

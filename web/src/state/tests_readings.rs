@@ -1,0 +1,52 @@
+//! Readings typed at the bench and out of the logbook.
+
+use super::*;
+
+fn typed(state: &State, field: Field, text: &str) -> State {
+    state.after(Action::Type(field, text.into())).after(Action::Commit(field))
+}
+
+#[test]
+fn an_angle_may_be_in_degrees_and_minutes_and_an_empty_box_takes_it_out_again() {
+    let start = State::new(Job::from_json(DEMOS[0].json).unwrap());
+    let field = Field::Reading(1, 7, BladeFigure::Angle);
+    let read = typed(&start, field, "18 30");
+    let reading = read.job().carved.as_ref().unwrap().blades[1].readings[0];
+    assert_eq!(reading.angle_deg, Some(18.5));
+    assert!((reading.radius_m - 0.54).abs() < 1e-4);
+    let more = typed(&read, Field::Reading(1, 7, BladeFigure::Chord), "76");
+    assert_eq!(more.job().carved.as_ref().unwrap().blades[1].readings.len(), 1);
+    let without = typed(&more, field, "");
+    assert_eq!(without.job().carved.as_ref().unwrap().blades[1].readings[0].angle_deg, None);
+    let none = typed(&without, Field::Reading(1, 7, BladeFigure::Chord), "");
+    assert_eq!(none.job().carved.as_ref().unwrap().blades[1].readings.len(), 0);
+}
+
+#[test]
+fn an_impossible_angle_is_refused_with_its_likely_cause_and_changes_nothing() {
+    let start = State::new(Job::from_json(DEMOS[0].json).unwrap());
+    let field = Field::Reading(0, 3, BladeFigure::Angle);
+    for (text, said) in [("146.5", "read from the other side"), ("north", "ot a number")] {
+        let refused = typed(&start, field, text);
+        assert!(refused.job().carved.is_none());
+        let message = refused.drafts[&field].message.clone().unwrap();
+        assert!(message.contains(said), "{message}");
+    }
+}
+
+#[test]
+fn a_reading_of_the_logbook_is_added_typed_and_removed() {
+    let choose = |state: &State, choice: LogbookChoice| {
+        state.after(Action::Choose(Choice::Logbook(choice), Running::default()))
+    };
+    let start = State::new(Job::from_json(DEMOS[0].json).unwrap());
+    let one = choose(&start, LogbookChoice::Add);
+    let read =
+        typed(&typed(&one, Field::Log(0, LogFigure::Rpm), "2950"), Field::Log(0, LogFigure::Throttle), "100");
+    let reading = &read.job().logbook.as_ref().unwrap().readings[0];
+    assert_eq!((reading.engine_rpm, reading.throttle), (2950.0, Some(1.0)));
+    let level = choose(&read, LogbookChoice::Level(0, true));
+    assert!(level.notice.is_some(), "level flight needs an airspeed");
+    let gone = choose(&read, LogbookChoice::Remove(0));
+    assert!(gone.job().logbook.as_ref().unwrap().readings.is_empty());
+}
