@@ -8,15 +8,15 @@
 //! line. Nothing here judges strength.
 
 mod blank;
-mod draw;
+pub(crate) mod draw;
 mod error;
 mod file;
 mod form;
 mod loft;
-mod page;
+pub(crate) mod page;
 mod ring;
 mod shape;
-mod sheet;
+pub(crate) mod sheet;
 mod solid;
 mod turned;
 mod unit;
@@ -29,7 +29,7 @@ pub use error::{BenchError, Fault};
 pub use file::{File, files, sheet_files};
 pub use form::{Form, SIDE_POINTS};
 pub use loft::{Boss, loft, root_radius_m};
-pub use page::{CAUTIONS, Leaf, Paper, Sheet, View, lay};
+pub use page::{CAUTIONS, Leaf, Paper, Sheet, View, bind, lay};
 pub use ring::Ring;
 pub use sheet::{Card, Side, leaves, machine_drawings, stack_drawing, template_card};
 pub use solid::Solid;

@@ -12,6 +12,7 @@ pub mod blade;
 pub mod carved;
 pub mod change;
 pub mod curve;
+pub mod dossier;
 pub mod drawn;
 pub mod engine;
 pub mod fit;

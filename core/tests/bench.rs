@@ -1,9 +1,12 @@
 //! The blade in wood: the solid is closed, the paper tells what the solid has, and what cannot be made is said.
 
+mod paper;
+
 use std::collections::HashMap;
 
+use paper::words_apart;
 use spokeshave::bench::{
-    Bench, BenchError, Fault, Item, Paper, Side, Solid, Unit, files, sheet_files, template_card,
+    Bench, BenchError, Fault, Paper, Side, Solid, Unit, files, sheet_files, template_card,
 };
 use spokeshave::job::{DEMOS, Hub, Job, Making, PitchControl, Rotation, Wood};
 use spokeshave::rig::Rig;
@@ -203,40 +206,7 @@ fn all_text_stays_on_its_sheet_and_apart() {
     for job in [demo(0), demo(1), demo(2), inches, wide] {
         let bench = bench(&job).unwrap();
         for (paper, unit) in [(Paper::A4, Unit::Millimetre), (Paper::Letter, Unit::Inch)] {
-            for sheet in bench.sheets(paper, unit) {
-                let [w, h] = sheet.size_mm;
-                let texts = |items: &[Item]| -> Vec<[f64; 4]> {
-                    items
-                        .iter()
-                        .filter_map(|item| match item {
-                            Item::Text(t) => {
-                                let left = t.at[0] + t.left_mm();
-                                let (low, high) = (t.at[1] - 0.1 * t.size_mm, t.at[1] + 0.65 * t.size_mm);
-                                Some([left, low, left + t.breadth_mm(), high])
-                            }
-                            _ => None,
-                        })
-                        .collect()
-                };
-                let mut all = texts(&sheet.frame.items);
-                for [x0, y0, x1, y1] in &all {
-                    assert!(*x0 > 5.0 && *y0 > 5.0 && *x1 < w - 5.0 && *y1 < h - 5.0, "{}", sheet.name);
-                }
-                for view in &sheet.views {
-                    let [low, high] = view.window_mm;
-                    all.extend(
-                        texts(&view.drawing.items).into_iter().filter(|t| {
-                            t[0] >= low[0] && t[2] <= high[0] && t[1] >= low[1] && t[3] <= high[1]
-                        }),
-                    );
-                }
-                for (i, a) in all.iter().enumerate() {
-                    for b in &all[i + 1..] {
-                        let apart = a[0] >= b[2] || b[0] >= a[2] || a[1] >= b[3] || b[1] >= a[3];
-                        assert!(apart, "{} of {}: texts at {a:?} and {b:?}", sheet.name, job.title);
-                    }
-                }
-            }
+            bench.sheets(paper, unit).iter().for_each(words_apart);
         }
     }
 }

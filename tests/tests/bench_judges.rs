@@ -4,7 +4,8 @@
 use std::path::Path;
 
 use serde_json::json;
-use spokeshave::bench::{Bench, Paper, Unit, files, sheet_files};
+use spokeshave::bench::{Bench, Paper, Unit, files, pdf, sheet_files};
+use spokeshave::dossier::{Scales, dossier};
 use spokeshave::job::{DEMOS, Job, PitchControl, Rotation};
 use spokeshave::rig::Rig;
 use spokeshave_tests::judge::ask;
@@ -85,6 +86,30 @@ fn validate_paper_mupdf() {
             written(folder.path(), sheet_files(&bench, paper, unit));
             let [w, h] = paper.size_mm().map(|mm| mm.to_string());
             judge("paper.py", &[text(folder.path()), &w, &h]);
+        }
+    }
+}
+
+#[test]
+fn validate_report_mupdf() {
+    let parts = [
+        "Verdict",
+        "Before you act",
+        "Inputs",
+        "Method and validity",
+        "Charts",
+        "Stations",
+        "Strength",
+        "Bench heights",
+    ];
+    for demo in &DEMOS {
+        let rig = Rig::new(&Job::from_json(demo.json).unwrap()).unwrap();
+        for (paper, scales) in [(Paper::A4, Scales::METRIC), (Paper::Letter, Scales::INCHES)] {
+            let folder = tempfile::tempdir().unwrap();
+            let file = folder.path().join("report.pdf");
+            std::fs::write(&file, pdf(&rig.job.title, &dossier(&rig, &scales, paper))).unwrap();
+            let [w, h] = paper.size_mm().map(|mm| mm.to_string());
+            judge("report.py", &[&[text(&file), w.as_str(), h.as_str()], &parts[..]].concat());
         }
     }
 }

@@ -101,8 +101,27 @@ pub fn lay(title: &str, leaves: &[Leaf], paper: Paper) -> Vec<Sheet> {
     let of = sheets.len();
     for (i, sheet) in sheets.iter_mut().enumerate() {
         furniture(sheet, title, &format!("sheet {} of {of}, {}", i + 1, paper.name()));
+        ruler(&mut sheet.frame, [MARGIN_MM, MARGIN_MM + 11.0]);
     }
     sheets
+}
+
+/// Binds pages that are read and not measured: each leaf is one page, its drawing's origin in the upper left corner of the room; no
+/// ruler.
+#[must_use]
+pub fn bind(title: &str, pages: Vec<Leaf>, paper: Paper) -> Vec<Sheet> {
+    let of = pages.len();
+    let ([x, y], [w, h]) = (paper.room_at_mm(), paper.room_mm());
+    let page = |(i, leaf): (usize, Leaf)| {
+        let mut drawing = Drawing::default();
+        drawing.add(&leaf.drawing, [x, y + h]);
+        let views = vec![View { drawing, window_mm: [[x, y], [x + w, y + h]] }];
+        let mut sheet = Sheet { name: leaf.name, size_mm: paper.size_mm(), frame: Drawing::default(), views };
+        furniture(&mut sheet, title, &format!("page {} of {of}, {}", i + 1, paper.name()));
+        sheet.frame.line(Layer::Thin, [[x, y - 8.0], [x + w, y - 8.0]]);
+        sheet
+    };
+    pages.into_iter().enumerate().map(page).collect()
 }
 
 /// How a leaf is cut into parts that fit the room: their size, how many across and down.
@@ -210,7 +229,6 @@ fn furniture(sheet: &mut Sheet, title: &str, number: &str) {
         frame.text([left + named, top - 3.5], 3.0, Anchor::Start, fitted(title, 3.0, room - named));
     }
     frame.line(Layer::Thin, [[left, top - 6.0], [right, top - 6.0]]);
-    ruler(frame, [left, MARGIN_MM + 11.0]);
     let size = 2.8_f64.min((right - left) / CAUTIONS.iter().map(|c| breadth_mm(c, 1.0)).fold(1.0, f64::max));
     for (i, line) in CAUTIONS.iter().enumerate() {
         frame.text([left, MARGIN_MM + 7.0 - 3.3 * i as f64], size, Anchor::Start, *line);
@@ -241,7 +259,7 @@ fn ruler(frame: &mut Drawing, [x, y]: [f64; 2]) {
 }
 
 /// A text cut to a room.
-pub(super) fn fitted(words: &str, size_mm: f64, room_mm: f64) -> String {
+pub(crate) fn fitted(words: &str, size_mm: f64, room_mm: f64) -> String {
     if breadth_mm(words, size_mm) <= room_mm {
         return words.to_string();
     }

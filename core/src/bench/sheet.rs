@@ -6,7 +6,7 @@ mod layers;
 mod plan;
 mod side;
 mod station;
-mod table;
+pub(crate) mod table;
 mod template;
 
 pub use layers::stack_drawing;
@@ -21,8 +21,7 @@ use super::work::Bench;
 #[must_use]
 pub fn leaves(bench: &Bench, paper: Paper, unit: Unit) -> Vec<Leaf> {
     let room = paper.room_mm();
-    let mut leaves = vec![card::leaf(bench, unit, room)];
-    leaves.extend(station::leaves(bench, unit, room));
+    let mut leaves = tables(bench, paper, unit);
     leaves.push(layers::leaf(bench, unit, room));
     let mut blank = vec![plan::leaf(bench, unit, room), side::leaf(bench)];
     if bench.blank.boss.is_some() {
@@ -31,6 +30,12 @@ pub fn leaves(bench: &Bench, paper: Paper, unit: Unit) -> Vec<Leaf> {
     leaves.extend(abreast("Blank and hub", blank, room));
     leaves.extend(template::leaves(bench, unit, room));
     leaves
+}
+
+/// The leaves that say what to carve without a drawing at full size: the job card, bench heights and angles.
+pub(crate) fn tables(bench: &Bench, paper: Paper, unit: Unit) -> Vec<Leaf> {
+    let room = paper.room_mm();
+    std::iter::once(card::leaf(bench, unit, room)).chain(station::leaves(bench, unit, room)).collect()
 }
 
 /// Small drawings side by side on one leaf, where all of them fit its room; else each on its own.

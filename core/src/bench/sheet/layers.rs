@@ -6,18 +6,18 @@ use crate::bench::page::Leaf;
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
 
-use super::table::{lines, table};
+use super::table::{figures, lines, table};
 
 pub(super) fn leaf(bench: &Bench, unit: Unit, room: [f64; 2]) -> Leaf {
     let mut drawing = Drawing::default();
     let layers = &bench.blank.layers;
     let mut y = -lines(&mut drawing, [0.0, 0.0], 3.0, &words(bench, unit)) - 4.0;
     let header = [
-        ("lamination\nfrom the back", 30.0),
-        ("from", 20.0),
-        ("to", 20.0),
-        ("width", 24.0),
-        ("turned", 24.0),
+        figures("lamination\nfrom the back", 30.0),
+        figures("from", 20.0),
+        figures("to", 20.0),
+        figures("width", 24.0),
+        figures("turned", 24.0),
     ];
     let rows: Vec<Vec<String>> = layers
         .planks

@@ -5,7 +5,7 @@ use crate::bench::page::Leaf;
 use crate::bench::unit::Unit;
 use crate::bench::work::{Bench, Carved};
 
-use super::table::{ROW_MM, lines, table};
+use super::table::{Column, ROW_MM, figures, lines, table};
 
 pub(super) fn leaves(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<Leaf> {
     let per_leaf = ((0.5 * (room[1] - 70.0) / ROW_MM) as usize).max(4);
@@ -48,23 +48,23 @@ fn tables(bench: &Bench, stations: &[Carved], unit: Unit) -> Drawing {
     drawing
 }
 
-const HEIGHTS: [(&str, f64); 10] = [
-    ("station", 14.0),
-    ("radius", 18.0),
-    ("leading\nedge", 18.0),
-    ("trailing\nedge", 18.0),
-    ("lowest\nwood", 18.0),
-    ("highest\nwood", 18.0),
-    ("lead. edge\ndown from\nfront", 20.0),
-    ("trail. edge\ndown from\nfront", 20.0),
-    ("lead. edge\nfrom the\nmiddle line", 22.0),
-    ("trail. edge\nfrom the\nmiddle line", 22.0),
+const HEIGHTS: [Column; 10] = [
+    figures("station", 14.0),
+    figures("radius", 18.0),
+    figures("leading\nedge", 18.0),
+    figures("trailing\nedge", 18.0),
+    figures("lowest\nwood", 18.0),
+    figures("highest\nwood", 18.0),
+    figures("lead. edge\ndown from\nfront", 20.0),
+    figures("trail. edge\ndown from\nfront", 20.0),
+    figures("lead. edge\nfrom the\nmiddle line", 22.0),
+    figures("trail. edge\nfrom the\nmiddle line", 22.0),
 ];
 
 fn heights(bench: &Bench, station: &Carved, unit: Unit) -> Vec<String> {
     let h = &station.heights;
     let down = |z: f64| bench.blank.thickness_m - z;
-    let figures = [
+    let read = [
         h.radius_m,
         h.leading_m,
         h.trailing_m,
@@ -75,16 +75,16 @@ fn heights(bench: &Bench, station: &Carved, unit: Unit) -> Vec<String> {
         h.plan_m[0],
         h.plan_m[1],
     ];
-    std::iter::once(station.number.to_string()).chain(figures.map(|v| unit.figure(v))).collect()
+    std::iter::once(station.number.to_string()).chain(read.map(|v| unit.figure(v))).collect()
 }
 
-const ANGLES: [(&str, f64); 6] = [
-    ("station", 14.0),
-    ("radius", 20.0),
-    ("on the\nflat face", 24.0),
-    ("to the\nchord line", 24.0),
-    ("chord", 22.0),
-    ("greatest\nthickness", 24.0),
+const ANGLES: [Column; 6] = [
+    figures("station", 14.0),
+    figures("radius", 20.0),
+    figures("on the\nflat face", 24.0),
+    figures("to the\nchord line", 24.0),
+    figures("chord", 22.0),
+    figures("greatest\nthickness", 24.0),
 ];
 
 fn angles(station: &Carved, unit: Unit) -> Vec<String> {

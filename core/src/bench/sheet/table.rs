@@ -1,34 +1,58 @@
 //! Tables on paper.
 
 use crate::bench::draw::{Anchor, Drawing, Layer};
+use crate::bench::page::fitted;
 
 /// Height of a row, mm.
-pub(super) const ROW_MM: f64 = 5.6;
+pub(crate) const ROW_MM: f64 = 5.6;
+/// Height of a line of a heading, mm.
+const LINE_MM: f64 = 3.6;
 /// Size of letters, mm.
-pub(super) const SIZE_MM: f64 = 3.0;
+pub(crate) const SIZE_MM: f64 = 3.0;
 
-/// Draws a table with its upper left corner at `at`: headings in as many lines as they need, figures to the right; gives the
-/// height it takes, mm.
-pub(super) fn table(
-    drawing: &mut Drawing,
-    at: [f64; 2],
-    columns: &[(&str, f64)],
-    rows: &[Vec<String>],
-) -> f64 {
-    let lines = columns.iter().map(|(head, _)| head.lines().count()).max().unwrap_or(1);
-    let wide: f64 = columns.iter().map(|c| c.1).sum();
-    let head = 3.6 * lines as f64 + 1.8;
-    let mut right = at[0];
-    for (i, (heading, width)) in columns.iter().enumerate() {
-        right += width;
-        let text: Vec<&str> = heading.lines().collect();
+/// A column of a table.
+#[derive(Clone, Copy, Debug)]
+pub(crate) struct Column<'h> {
+    /// Its heading, in lines.
+    pub(crate) head: &'h str,
+    /// Its width, mm.
+    pub(crate) mm: f64,
+    /// Whether it holds words, which begin at its left edge, and not figures, which end at its right.
+    pub(crate) words: bool,
+}
+
+/// A column of figures.
+pub(crate) const fn figures(head: &str, mm: f64) -> Column<'_> {
+    Column { head, mm, words: false }
+}
+
+/// A column of words.
+pub(crate) const fn words(head: &str, mm: f64) -> Column<'_> {
+    Column { head, mm, words: true }
+}
+
+/// Draws a table with its upper left corner at `at`: headings in as many lines as they need, words to the left, figures to the right; gives
+/// the height it takes, mm.
+pub(crate) fn table(drawing: &mut Drawing, at: [f64; 2], columns: &[Column], rows: &[Vec<String>]) -> f64 {
+    let lines = columns.iter().map(|c| c.head.lines().count()).max().unwrap_or(1);
+    let wide: f64 = columns.iter().map(|c| c.mm).sum();
+    let head = head_mm(columns);
+    let mut left = at[0];
+    for (i, column) in columns.iter().enumerate() {
+        let indent = if i > 0 { 2.0 } else { 0.0 };
+        let (x, anchor) =
+            if column.words { (left + indent, Anchor::Start) } else { (left + column.mm - 1.5, Anchor::End) };
+        left += column.mm;
+        let text: Vec<&str> = column.head.lines().collect();
         for (k, line) in text.iter().enumerate() {
-            let y = at[1] - 3.6 * (lines - text.len() + k + 1) as f64;
-            drawing.bold([right - 1.5, y], 2.7, Anchor::End, *line);
+            let y = at[1] - LINE_MM * (lines - text.len() + k + 1) as f64;
+            drawing.bold([x, y], 2.7, anchor, *line);
         }
         for (k, row) in rows.iter().enumerate() {
             let y = at[1] - head - ROW_MM * (k as f64 + 1.0) + 1.8;
-            drawing.text([right - 1.5, y], SIZE_MM, Anchor::End, row.get(i).cloned().unwrap_or_default());
+            let cell = row.get(i).map_or("", String::as_str);
+            let room = if column.words { column.mm - 1.5 - indent } else { f64::INFINITY };
+            drawing.text([x, y], SIZE_MM, anchor, fitted(cell, SIZE_MM, room));
         }
     }
     for k in 0..=rows.len() {
@@ -38,8 +62,13 @@ pub(super) fn table(
     head + ROW_MM * rows.len() as f64
 }
 
+/// Height of a table's headings, mm.
+pub(crate) fn head_mm(columns: &[Column]) -> f64 {
+    LINE_MM * columns.iter().map(|c| c.head.lines().count()).max().unwrap_or(1) as f64 + 1.8
+}
+
 /// Lines of text under one another from the upper left corner `at`; gives the height they take, mm.
-pub(super) fn lines(drawing: &mut Drawing, at: [f64; 2], size_mm: f64, words: &[String]) -> f64 {
+pub(crate) fn lines(drawing: &mut Drawing, at: [f64; 2], size_mm: f64, words: &[String]) -> f64 {
     let step = 1.5 * size_mm;
     for (k, line) in words.iter().enumerate() {
         drawing.text(

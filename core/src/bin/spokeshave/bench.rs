@@ -5,6 +5,7 @@ mod sheets;
 mod strength;
 
 use clap::Subcommand;
+pub(crate) use sheets::{PaperName, UnitName};
 
 use crate::input::{JobSource, Outcome};
 

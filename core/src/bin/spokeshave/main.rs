@@ -13,6 +13,7 @@ mod input;
 mod logbook;
 mod map;
 mod polar;
+mod report;
 mod sections;
 mod shape;
 mod sweep;
@@ -41,6 +42,7 @@ const EXAMPLES: &str = "Examples:
   spokeshave carved JOB.json --readings READINGS.csv    the blades as measured, and what to take off
   spokeshave bench JOB.json strength               stress and margin by station, vibration, weight, hub
   spokeshave logbook JOB.json --readings READINGS.csv   what ground runs and flights tell, and what to change
+  spokeshave report JOB.json --pdf REPORT.pdf      the whole job as pages to hand in or to keep with the propeller
   spokeshave sweep JOB.json --point Cruise --csv   coefficients from rest to where the thrust is gone
   spokeshave map JOB.json --point Cruise --csv     departure over speed and radius
   spokeshave demo light-aeroplane > JOB.json       a job file to start from
@@ -66,6 +68,8 @@ enum Command {
     Carved(carved::Args),
     /// What readings of ground runs and flights tell, and what to change
     Logbook(logbook::Args),
+    /// The whole job as one PDF: verdict, inputs, method, charts, stations, strength, carving tables, readings
+    Report(report::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),
     /// Departure over speed and radius at a flight point's air
@@ -92,6 +96,7 @@ fn main() -> ExitCode {
         Command::Bench(args) => bench::run(&args),
         Command::Carved(args) => carved::run(&args),
         Command::Logbook(args) => logbook::run(&args),
+        Command::Report(args) => report::run(&args),
         Command::Sweep(args) => sweep::run(&args),
         Command::Map(args) => map::run(&args),
         Command::Sections(args) => sections::run(&args),

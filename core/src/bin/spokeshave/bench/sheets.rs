@@ -16,15 +16,25 @@ pub(crate) struct Args {
     paper: PaperName,
 }
 
+/// Size of the paper.
 #[derive(Clone, Copy, ValueEnum)]
-enum PaperName {
+pub(crate) enum PaperName {
     A4,
     Letter,
 }
 
+impl From<PaperName> for Paper {
+    fn from(name: PaperName) -> Self {
+        match name {
+            PaperName::A4 => Self::A4,
+            PaperName::Letter => Self::Letter,
+        }
+    }
+}
+
 /// Unit of the lengths written on paper; drawings are full size in either.
 #[derive(Clone, Copy, ValueEnum)]
-pub(super) enum UnitName {
+pub(crate) enum UnitName {
     Mm,
     Inch,
 }
@@ -39,12 +49,8 @@ impl From<UnitName> for Unit {
 }
 
 pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
-    let paper = match args.paper {
-        PaperName::A4 => Paper::A4,
-        PaperName::Letter => Paper::Letter,
-    };
     let bench = made_ready(rig)?;
-    args.out.write(&sheet_files(&bench, paper, args.out.unit()))?;
+    args.out.write(&sheet_files(&bench, args.paper.into(), args.out.unit()))?;
     print(&format!(
         "\nPrint at 100 %, never fitted to the page; measure the 100 mm bar on every sheet.\n{}",
         CAUTIONS.join(" ")
