@@ -20,6 +20,7 @@ pub mod panel;
 pub mod pasted;
 pub mod points;
 pub mod reading;
+pub mod report;
 pub mod room;
 pub mod sections;
 pub mod shape;

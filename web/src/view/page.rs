@@ -20,6 +20,7 @@ use super::notice::Said;
 use super::panel::Panel;
 use super::points::Points;
 use super::reading::{Lying, MapReading, Standing, StationReading};
+use super::report::ReportPanel;
 use super::room::{Room, use_room};
 use super::sections::{self, Sections};
 use super::shape::{self, ShapePanel};
@@ -145,6 +146,9 @@ fn Panels(props: &PageProps) -> Html {
             </Panel>
             <Panel id="method" number={13} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
+            </Panel>
+            <Panel id="report" number={14} title="Report" open=false result="the whole job as pages to print or to save as PDF">
+                <ReportPanel rig={later.rig.clone()} units={state.units} />
             </Panel>
         </>
     }

@@ -4,7 +4,7 @@ use gloo_events::EventListener;
 use yew::prelude::*;
 
 /// Parts of the page by id and name, in the order of the job.
-pub const PARTS: [(&str, &str); 14] = [
+pub const PARTS: [(&str, &str); 15] = [
     ("departure", "Departure"),
     ("aircraft", "1 Aircraft"),
     ("engine", "2 Engine"),
@@ -19,6 +19,7 @@ pub const PARTS: [(&str, &str); 14] = [
     ("carved", "11 As carved"),
     ("logbook", "12 Logbook"),
     ("method", "13 Method"),
+    ("report", "14 Report"),
 ];
 
 /// Height over which a part counts as reached, pixels.

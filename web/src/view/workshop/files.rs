@@ -60,7 +60,7 @@ fn made_file(made: &Made, sheets: &[Sheet], unit: Unit, ending: &str) -> Option<
 }
 
 /// The browser did not take a file.
-pub(super) fn not_taken(what: &str) -> Notice {
+pub(in crate::view) fn not_taken(what: &str) -> Notice {
     let title = format!("{what}: the browser did not take the file. The job on the page stays.");
     Notice { title, lines: Vec::new() }
 }

@@ -1,9 +1,9 @@
 //! From the blade to the bench: the solid turning, the blank in three views, every sheet of paper, files to take away.
 
-mod files;
+pub(super) mod files;
 mod look;
 mod print;
-mod sheets;
+pub(super) mod sheets;
 mod turning;
 
 use std::rc::Rc;
@@ -74,6 +74,29 @@ fn refused(why: &BenchError) -> Html {
     }
 }
 
+/// The unit of lengths on paper.
+pub(super) fn on_paper(unit: LengthUnit) -> Unit {
+    match unit {
+        LengthUnit::Millimetre => Unit::Millimetre,
+        LengthUnit::Inch => Unit::Inch,
+    }
+}
+
+/// Which paper.
+pub(super) fn paper_pick(paper: &UseStateHandle<Paper>) -> Html {
+    let pick = |of: Paper| {
+        let paper = paper.clone();
+        let pressed = (*paper == of).to_string();
+        html! { <button type="button" aria-pressed={pressed} onclick={move |_| paper.set(of)}>{ of.name() }</button> }
+    };
+    html! {
+        <div class="workshop-paper">
+            <span class="label">{ "Paper" }</span>
+            <span class="segments" role="group" aria-label="Size of the paper">{ pick(Paper::A4) }{ pick(Paper::Letter) }</span>
+        </div>
+    }
+}
+
 #[derive(Properties, PartialEq)]
 struct ShownProps {
     made: Made,
@@ -83,28 +106,18 @@ struct ShownProps {
 #[component]
 fn Shown(props: &ShownProps) -> Html {
     let paper = use_state_eq(Paper::default);
-    let unit = match props.unit {
-        LengthUnit::Millimetre => Unit::Millimetre,
-        LengthUnit::Inch => Unit::Inch,
-    };
+    let unit = on_paper(props.unit);
     let laid =
         use_memo((props.made.clone(), *paper, unit), |(made, paper, unit)| made.0.sheets(*paper, *unit));
-    let pick = |of: Paper| {
-        let paper = paper.clone();
-        let pressed = (*paper == of).to_string();
-        html! { <button type="button" aria-pressed={pressed} onclick={move |_| paper.set(of)}>{ of.name() }</button> }
-    };
     html! {
         <div class="workshop">
             <div class="workshop-views">
                 <Turning made={props.made.clone()} />
                 <Views made={props.made.clone()} {unit} />
             </div>
-            <div class="workshop-paper">
-                <span class="label">{ "Paper" }</span>
-                <span class="segments" role="group" aria-label="Size of the paper">{ pick(Paper::A4) }{ pick(Paper::Letter) }</span>
-            </div>
-            <Sheets sheets={laid.clone()} paper={*paper} />
+            { paper_pick(&paper) }
+            <Sheets sheets={laid.clone()} paper={*paper} name="sheet"
+                note="Print at 100 %, never fitted to the page, and measure the 100 mm bar on every sheet before you cut." />
             <Files made={props.made.clone()} sheets={laid} {unit} />
             { caution::paper() }
         </div>

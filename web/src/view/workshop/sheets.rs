@@ -1,4 +1,4 @@
-//! Every sheet of paper, small, and the button that prints them all.
+//! Every sheet or page of paper, small, and the button that prints them all.
 
 use std::rc::Rc;
 
@@ -11,13 +11,17 @@ use crate::state::Action;
 use crate::view::use_act;
 
 #[derive(Properties, PartialEq)]
-pub(super) struct SheetsProps {
-    pub(super) sheets: Rc<Vec<Sheet>>,
-    pub(super) paper: Paper,
+pub(in crate::view) struct SheetsProps {
+    pub(in crate::view) sheets: Rc<Vec<Sheet>>,
+    pub(in crate::view) paper: Paper,
+    /// What one of them is called.
+    pub(in crate::view) name: &'static str,
+    /// What to mind when printing.
+    pub(in crate::view) note: &'static str,
 }
 
 #[component]
-pub(super) fn Sheets(props: &SheetsProps) -> Html {
+pub(in crate::view) fn Sheets(props: &SheetsProps) -> Html {
     let drawn = use_memo(props.sheets.clone(), |sheets| sheets.iter().map(svg).collect::<Vec<String>>());
     let printing = use_state_eq(|| false);
     let act = use_act();
@@ -30,7 +34,7 @@ pub(super) fn Sheets(props: &SheetsProps) -> Html {
         Callback::from(move |()| printing.set(false))
     };
     let small = |(i, (sheet, drawn)): (usize, (&Sheet, &String))| {
-        let (text, name) = (drawn.clone(), format!("sheet-{:02}.svg", i + 1));
+        let (text, name) = (drawn.clone(), format!("{}-{:02}.svg", props.name, i + 1));
         let act = act.clone();
         let take = move |_: MouseEvent| {
             if !file::offer(&name, "image/svg+xml", &text) {
@@ -41,7 +45,7 @@ pub(super) fn Sheets(props: &SheetsProps) -> Html {
             <figure class="on-paper small">
                 { Html::from_html_unchecked(drawn.clone().into()) }
                 <figcaption>{ format!("{}. {}", i + 1, sheet.name) }
-                    <button type="button" class="inline" onclick={take} aria-label={format!("SVG of sheet {}", i + 1)}>{ "SVG" }</button>
+                    <button type="button" class="inline" onclick={take} aria-label={format!("SVG of {} {}", props.name, i + 1)}>{ "SVG" }</button>
                 </figcaption>
             </figure>
         }
@@ -49,9 +53,9 @@ pub(super) fn Sheets(props: &SheetsProps) -> Html {
     html! {
         <>
             <div class="buttons">
-                <button type="button" class="act" onclick={print}>{ format!("Print {} sheets, {}", drawn.len(), props.paper.name()) }</button>
+                <button type="button" class="act" onclick={print}>{ format!("Print {} {}s, {}", drawn.len(), props.name, props.paper.name()) }</button>
             </div>
-            <p class="note">{ "Print at 100 %, never fitted to the page, and measure the 100 mm bar on every sheet before you cut." }</p>
+            <p class="note">{ props.note }</p>
             <div class="sheet-previews">{ for props.sheets.iter().zip(drawn.iter()).enumerate().map(small) }</div>
             if *printing { <Print sheets={drawn} paper={props.paper} {over} /> }
         </>
