@@ -158,7 +158,7 @@ fn each_wrong_reading_is_named_by_its_path_with_its_likely_cause() {
         ("/carved", json!({"blades": [{}], "density_kg_m3": 5}), "carved.density_kg_m3: 5"),
         ("/carved", json!({"blades": [{}], "least_chord_share": 2}), "carved.least_chord_share: 2"),
         ("/carved", json!({"blades": [{}], "least_thickness_share": 0}), "carved.least_thickness_share: 0"),
-        ("/logbook", json!({"readings": [{}]}), "logbook.readings[0]: missing field `engine_rpm`"),
+        ("/logbook", json!({"readings": [{"rpm": 2900}]}), "logbook.readings[0].rpm: unknown field"),
         (
             "/logbook",
             json!({"readings": [{"engine_rpm": 2900, "throttle": 100}]}),

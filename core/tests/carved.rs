@@ -27,6 +27,7 @@ fn carved_by(off: impl Fn(usize, usize) -> [f64; 3]) -> Rig {
                     chord_m: Some(cut.chord_m + 1e-3 * chord),
                     thickness_m: Some(cut.thickness_ratio * cut.chord_m + 1e-3 * thickness),
                     track_m: None,
+                    confirmed: false,
                 }
             })
             .collect(),
@@ -128,6 +129,35 @@ fn unequal_masses_shake_by_their_moment_times_the_square_of_the_speed() {
     assert!((at_tip - found.balance.unbalance_kg_m).abs() < 1e-12);
 }
 
+/// A blade whose masses lie ahead by a (r − h), as a straight lean from the hub at h does, turns with the moment ω² a (I − h S) across the shaft, I and S its
+/// moments of inertia and of mass (any text of mechanics; common practice).
+#[test]
+fn a_blade_out_of_track_turns_its_moment_with_the_shaft() {
+    let mut rig = carved_by(|_, _| [0.0; 3]);
+    let none = carved::analyse(&rig).unwrap();
+    assert!(none.flight_points.iter().all(|p| p.once_per_turn.unwrap().track_moment_n_m.is_none()));
+    let (hub, slope) = (rig.rotor.blade.hub_radius_m, 0.004);
+    for reading in &mut rig.job.carved.as_mut().unwrap().blades[0].readings {
+        reading.track_m = Some(slope * (reading.radius_m - hub));
+    }
+    // The outermost reading is held over the last of the blade.
+    let last = rig.rotor.blade.station_radii_m().last().unwrap();
+    let mass = spokeshave::wood::mass(&spokeshave::wood::BladeBeam::new(&rig).unwrap());
+    let lean = slope * (mass.blade_inertia_kg_m2 - hub * mass.static_moment_kg_m);
+    let found = carved::analyse(&rig).unwrap();
+    for p in &found.flight_points {
+        let omega = p.carved.rpm.unwrap() * TAU / 60.0;
+        let moment = p.once_per_turn.unwrap().track_moment_n_m.unwrap();
+        let share = moment / (omega * omega * lean);
+        assert!((0.97..=1.0).contains(&share), "{share} with the last reading at {last}");
+    }
+    // Both blades ahead alike: nothing turns.
+    let carved = rig.job.carved.as_mut().unwrap();
+    carved.blades[1] = carved.blades[0].clone();
+    let even = carved::analyse(&rig).unwrap();
+    assert!(even.flight_points[0].once_per_turn.unwrap().track_moment_n_m.unwrap() < 1e-9);
+}
+
 /// Loads of unequal blades lie between those of propellers all of one blade and of the other, and add up to the mean to first order.
 #[test]
 fn a_blade_of_larger_angle_carries_more_and_the_sum_is_that_of_the_mean() {
@@ -217,6 +247,39 @@ fn doubts_name_the_likely_cause() {
         assert_eq!((doubts.len(), doubts[0].blade), (1, 2), "{doubts:?}");
         assert!(doubts[0].message.contains(cause), "{doubts:?}");
     }
+}
+
+#[test]
+fn what_is_hard_to_believe_is_left_out_until_it_is_confirmed() {
+    // One angle of blade 2 read from the shaft, and nothing else wrong: the neighbours and the other blade stay as they are.
+    let mut rig = carved_by(|_, _| [0.0; 3]);
+    let at = |rig: &mut Rig, change: &dyn Fn(&mut BladeReading)| {
+        change(&mut rig.job.carved.as_mut().unwrap().blades[1].readings[6]);
+    };
+    at(&mut rig, &|r| r.angle_deg = r.angle_deg.map(|a| 90.0 - a));
+    let found = carved::analyse(&rig).unwrap();
+    assert!(!found.doubts[0].counted && (found.doubts[0].blade, found.doubts[0].reading) == (2, 7));
+    let off = |c: &spokeshave::result::Carved| {
+        let all = c.blades.iter().flat_map(|b| &b.stations).map(|s| s.angle_deg.from_drawn.abs());
+        all.fold(0.0, f64::max)
+    };
+    assert!(off(&found) < 1e-6, "{}", off(&found));
+    let station = &found.blades[1].stations[6];
+    assert_eq!((station.angle_deg.known, station.chord_m.known), (Known::Interpolated, Known::Measured));
+    // Confirmed it counts, and is still told.
+    at(&mut rig, &|r| r.confirmed = true);
+    let found = carved::analyse(&rig).unwrap();
+    assert!(found.doubts[0].counted && off(&found) > 20.0);
+    // A blade that nobody measured is not turned by it.
+    rig.job.carved.as_mut().unwrap().blades.remove(0);
+    rig.job.carved.as_mut().unwrap().blades[0].readings[6].confirmed = false;
+    let found = carved::analyse(&rig).unwrap();
+    assert!(off(&found) < 1e-6 && found.blades[1].readings == 0);
+    // Nothing left: it is said why.
+    let all = &mut rig.job.carved.as_mut().unwrap().blades[0].readings;
+    all.retain(|r| (r.radius_m - 0.48).abs() < 1e-3);
+    (all[0].chord_m, all[0].thickness_m) = (None, None);
+    assert!(carved::analyse(&rig).unwrap_err().to_string().contains("none is confirmed"));
 }
 
 #[test]

@@ -40,6 +40,18 @@ fn readings_are_told_for_people_for_programs_as_a_sheet_and_as_a_job() {
 }
 
 #[test]
+fn what_is_hard_to_believe_is_left_out_unless_confirmed() {
+    let sheet = format!("{SHEET}2,720,75,44,6.0\n");
+    let text = out(&carved(&[], &sheet));
+    assert!(text.contains("Hard to believe, left out: blade 2, 720.0 mm: angle 75.00°"), "{text}");
+    assert!(text.contains("perhaps read from the shaft"), "{text}");
+    let text = out(&carved(&["--confirm"], &sheet));
+    assert!(text.contains("Hard to believe, counted, as confirmed: blade 2"), "{text}");
+    let job = Job::from_json(&out(&carved(&["--confirm", "--job"], &sheet))).unwrap();
+    assert!(job.carved.unwrap().blades[1].readings.iter().any(|r| r.confirmed));
+}
+
+#[test]
 fn bad_readings_end_with_2_and_say_where() {
     let o = carved(&[], "blade,radius_mm,angle\n1,540,north\n");
     assert_eq!(o.status.code(), Some(2));

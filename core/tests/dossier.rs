@@ -29,7 +29,7 @@ fn full() -> Job {
     let text = "blade,radius_mm,face angle,chord_mm,thickness_mm\n1,300,30.2,94,21.5\n1,540,19.5,77.5,11.8\n2,300,29.1,93.5,21.2\n2,720,15,44,5.8\n";
     job.carved = Some(carved::import::read(text, &job.propeller, None).unwrap().0);
     let reading = |engine_rpm, airspeed_m_s, level: bool| LogReading {
-        engine_rpm,
+        engine_rpm: Some(engine_rpm),
         airspeed_m_s,
         throttle: (!level).then_some(1.0),
         level,
@@ -171,7 +171,7 @@ fn what_a_job_lacks_is_left_out() {
     );
     // Readings that tell nothing are shown, and why.
     let mut idle = demo(0);
-    let reading = LogReading { engine_rpm: 1000.0, throttle: Some(0.2), ..LogReading::default() };
+    let reading = LogReading { engine_rpm: Some(1000.0), throttle: Some(0.2), ..LogReading::default() };
     idle.logbook = Some(Logbook { readings: vec![reading], ..Logbook::default() });
     assert!(says(&idle, "Nothing is told"));
 }

@@ -4,6 +4,7 @@ use spokeshave::change::{Wanted, changes};
 use spokeshave::fit;
 use spokeshave::job::{
     Aircraft, BladeReading, Carved, CarvedBlade, DEMOS, Engine, Factors, Job, LogReading, Logbook,
+    PitchControl,
 };
 use spokeshave::logbook::{estimate, import};
 use spokeshave::result::{Figure, Logged, Means};
@@ -43,7 +44,7 @@ fn read(truth: &Rig, altitude_m: f64, speed: f64, full: bool, noise: &mut dyn Fn
     LogReading {
         altitude_m: Some(altitude_m),
         airspeed_m_s: speed * (1.0 + noise()),
-        engine_rpm: rpm * (1.0 + noise()),
+        engine_rpm: Some(rpm * (1.0 + noise())),
         throttle: if full { Some(1.0) } else { None },
         level: !full,
         fuel_kg_per_h: point.meeting.fuel_kg_per_h.map(|f| f * (1.0 + noise())),
@@ -75,6 +76,7 @@ fn truth() -> (Job, Rig) {
                 chord_m: Some(cut.chord_m),
                 thickness_m: Some(cut.chord_m * cut.thickness_ratio),
                 track_m: None,
+                confirmed: false,
             }
         })
         .collect();
@@ -107,7 +109,7 @@ fn factors_are_recovered_through_one_per_cent_of_noise() {
         let h = 150.0 * f64::from(i % 8);
         let i = i / 2;
         readings.push(read(&true_rig, h, 0.0, true, &mut || 0.0));
-        readings.last_mut().unwrap().engine_rpm *= 1.0 + one();
+        *readings.last_mut().unwrap().engine_rpm.as_mut().unwrap() *= 1.0 + one();
         *readings.last_mut().unwrap().fuel_kg_per_h.as_mut().unwrap() *= 1.0 + one();
         readings.push(read(&true_rig, h, 26.0 + f64::from(i), true, &mut one));
         readings.push(read(&true_rig, h, 34.0 + 0.6 * f64::from(i), false, &mut one));
@@ -124,7 +126,7 @@ fn factors_are_recovered_through_one_per_cent_of_noise() {
     // With the factors the expected rpm comes to the read one; without them it does not.
     let miss = |of: fn(&spokeshave::result::LogLine) -> Option<f64>| {
         let all: Vec<f64> =
-            found.readings.iter().filter_map(|l| Some((of(l)? / l.engine_rpm - 1.0).abs())).collect();
+            found.readings.iter().filter_map(|l| Some((of(l)? / l.engine_rpm? - 1.0).abs())).collect();
         all.iter().sum::<f64>() / all.len() as f64
     };
     assert!(miss(|l| l.after_rpm) < 0.011 && miss(|l| l.before_rpm) > 0.015);
@@ -205,7 +207,7 @@ fn a_wrong_reading_is_flagged_with_a_likely_cause_and_left_out() {
     let mut readings: Vec<LogReading> =
         (0..10).map(|i| read(&true_rig, 300.0, 30.0 + f64::from(i), true, &mut || 0.0)).collect();
     let clean = logged(&with_readings(&job, readings.clone())).estimate.factors;
-    readings[4].engine_rpm *= 0.5;
+    *readings[4].engine_rpm.as_mut().unwrap() *= 0.5;
     readings[7].left_out = true;
     let found = logged(&with_readings(&job, readings));
     let flagged: Vec<usize> =
@@ -247,14 +249,53 @@ fn a_motor_s_current_tells_the_propeller_s_power() {
     assert!((found.factors.engine_power / 0.97 - 1.0).abs() < 0.01, "{found:?}");
 }
 
+/// A run below the governed rpm has the blades on the fine stop, so that it tells as much as one of a fixed pitch; one at the governed rpm does not.
+#[test]
+fn a_governed_propeller_tells_on_its_fine_stop() {
+    let mut fixed = demo(0);
+    fixed.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: -1.0 };
+    let weak = Rig::with_factors(&fixed, &Factors { engine_power: 0.95, ..Factors::default() }).unwrap();
+    let mut readings: Vec<LogReading> =
+        (0..6).map(|i| read(&weak, 100.0, 2.0 * f64::from(i), true, &mut || 0.0)).collect();
+    let mut job = fixed;
+    job.propeller.pitch_control =
+        PitchControl::ConstantSpeed { rpm: 3250.0, turn_min_deg: -1.0, turn_max_deg: 9.0 };
+    let at_the_governor = LogReading {
+        engine_rpm: Some(3250.0),
+        throttle: Some(1.0),
+        airspeed_m_s: 45.0,
+        ..LogReading::default()
+    };
+    let only = with_readings(&job, vec![at_the_governor.clone()]);
+    let why = estimate(&Rig::new(&only).unwrap()).unwrap_err().to_string();
+    assert!(why.contains("governor") && why.contains("fine stop"), "{why}");
+    readings.push(at_the_governor);
+    let mut job = with_readings(&job, readings);
+    job.logbook.as_mut().unwrap().widths.propeller_power = 1e-3;
+    let found = logged(&job);
+    assert!((found.estimate.factors.engine_power / 0.95 - 1.0).abs() < 0.01, "{:?}", found.estimate);
+    assert!(found.readings[6].remark.contains("governed rpm") && found.readings[6].off.is_none());
+    assert!(found.readings[..6].iter().all(|l| l.off.is_some()), "{:?}", found.readings);
+}
+
+#[test]
+fn a_reading_without_an_rpm_waits_for_it() {
+    let (job, true_rig) = truth();
+    let whole = read(&true_rig, 0.0, 30.0, true, &mut || 0.0);
+    let found = logged(&with_readings(&job, vec![whole, LogReading::default()]));
+    assert_eq!((found.readings[1].engine_rpm, found.readings[1].off), (None, None));
+    assert!(found.readings[1].remark.contains("no rpm"), "{:?}", found.readings[1]);
+}
+
 #[test]
 fn what_has_no_answer_says_why() {
     let (job, _) = truth();
     let why = |job: &Job| estimate(&Rig::new(job).unwrap()).unwrap_err().to_string();
     assert!(why(&job).contains("no readings"));
-    let idle = LogReading { engine_rpm: 2000.0, throttle: Some(0.5), ..LogReading::default() };
+    let idle = LogReading { engine_rpm: Some(2000.0), throttle: Some(0.5), ..LogReading::default() };
     assert!(why(&with_readings(&job, vec![idle])).contains("no reading tells anything"));
-    let mut none = with_readings(&job, vec![LogReading { engine_rpm: 2000.0, ..LogReading::default() }]);
+    let mut none =
+        with_readings(&job, vec![LogReading { engine_rpm: Some(2000.0), ..LogReading::default() }]);
     none.engine = None;
     assert!(why(&none).contains("no engine"));
 }

@@ -1,11 +1,13 @@
-//! Static balance of unequal blades.
+//! Balance of unequal blades: static, and of blades that run out of track.
 
 use std::f64::consts::TAU;
 
 use super::CarvedError;
-use crate::job::Carved;
+use crate::curve::Curve;
+use crate::job::{BladeReading, Carved};
 use crate::result::{MassOf, StaticBalance};
 use crate::rig::Rig;
+use crate::wood::beam::first_moment;
 use crate::wood::{self, BladeBeam};
 
 /// The resultant of what each blade contributes in its own direction, evenly spaced round the hub.
@@ -44,4 +46,36 @@ pub(super) fn balance(rig: &Rig, carved: &Carved, blades: &[Rig]) -> Result<Stat
         heavy_blade: (unbalance_kg_m > 1e-9).then_some(heavy + 1),
         grams_at_tip: 1e3 * unbalance_kg_m / rig.rotor.blade.radius_m,
     })
+}
+
+/// `∫ z ρ A r dr` of each blade, kg m²: `z` is how far its masses lie ahead of the plane of the hub, as read, straight between readings, from
+/// nothing at the edge of the hub and held beyond the outermost; a blade without such a reading lies in the plane. `None` where none has one.
+pub(super) fn track_moments(
+    rig: &Rig,
+    carved: &Carved,
+    blades: &[Rig],
+    density_kg_m3: f64,
+) -> Result<Option<Vec<f64>>, CarvedError> {
+    let line = |b: usize| track(rig, carved.blades.get(b).map_or(&[], |blade| &blade.readings));
+    let lines: Vec<Option<Curve>> = (0..blades.len()).map(line).collect();
+    if lines.iter().all(Option::is_none) {
+        return Ok(None);
+    }
+    let moment = |(blade, line): (&Rig, &Option<Curve>)| -> Result<f64, CarvedError> {
+        let Some(line) = line else { return Ok(0.0) };
+        let beam = BladeBeam::new(blade)?;
+        let share = density_kg_m3 / beam.material.density_kg_m3;
+        let ahead: Vec<f64> =
+            beam.radii_m.iter().zip(&beam.mass_kg_m).map(|(r, m)| line.at(*r) * m).collect();
+        Ok(share * first_moment(&beam.radii_m, &ahead))
+    };
+    blades.iter().zip(&lines).map(moment).collect::<Result<Vec<f64>, CarvedError>>().map(Some)
+}
+
+/// How far a blade lies ahead over the radius.
+fn track(rig: &Rig, readings: &[BladeReading]) -> Option<Curve> {
+    let hub_m = rig.rotor.blade.hub_radius_m;
+    let read = readings.iter().filter(|r| r.radius_m > hub_m).filter_map(|r| Some((r.radius_m, r.track_m?)));
+    let (radii, ahead): (Vec<f64>, Vec<f64>) = std::iter::once((hub_m, 0.0)).chain(read).unzip();
+    if radii.len() > 1 { Curve::polyline(radii, ahead) } else { None }
 }

@@ -1,4 +1,4 @@
-//! Readings that are hard to believe, each with its likely cause.
+//! Readings that are hard to believe, each with its likely cause; they are left out until they are confirmed.
 
 use std::fmt::Write;
 
@@ -21,14 +21,36 @@ pub fn doubts(rig: &Rig) -> Vec<Doubt> {
     let Some(carved) = &rig.job.carved else { return Vec::new() };
     let mut found = Vec::new();
     for (b, blade) in carved.blades.iter().enumerate() {
-        for reading in &blade.readings {
-            let messages =
-                [angle(rig, carved.angle_reference, reading)].into_iter().chain(lengths(rig, reading));
-            let doubt = |message| Doubt { blade: b + 1, radius_m: reading.radius_m, message };
-            found.extend(messages.flatten().map(doubt));
+        for (i, reading) in blade.readings.iter().enumerate() {
+            let doubt = |message| Doubt {
+                blade: b + 1,
+                reading: i + 1,
+                radius_m: reading.radius_m,
+                message,
+                counted: reading.confirmed,
+            };
+            found.extend(doubted(rig, carved.angle_reference, reading).into_iter().flatten().map(doubt));
         }
     }
     found
+}
+
+/// A reading without what is hard to believe of it, unless it was confirmed.
+pub(super) fn believed(rig: &Rig, reference: AngleReference, reading: &BladeReading) -> BladeReading {
+    let [angle, chord, thickness] =
+        doubted(rig, reference, reading).map(|d| d.is_none() || reading.confirmed);
+    BladeReading {
+        angle_deg: reading.angle_deg.filter(|_| angle),
+        chord_m: reading.chord_m.filter(|_| chord),
+        thickness_m: reading.thickness_m.filter(|_| thickness),
+        ..*reading
+    }
+}
+
+/// What is hard to believe of angle, chord and thickness.
+fn doubted(rig: &Rig, reference: AngleReference, reading: &BladeReading) -> [Option<String>; 3] {
+    let [chord, thickness] = lengths(rig, reading);
+    [angle(rig, reference, reading), chord, thickness]
 }
 
 fn angle(rig: &Rig, reference: AngleReference, reading: &BladeReading) -> Option<String> {

@@ -109,6 +109,7 @@ fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, B
         chord_m: sheet.figure(row, "chord")?,
         thickness_m: sheet.figure(row, "thickness")?,
         track_m: sheet.figure(row, "track")?,
+        confirmed: false,
     };
     if let (Some(chord), Some(thickness)) = (reading.chord_m, reading.thickness_m)
         && thickness > chord

@@ -1,6 +1,6 @@
 //! What the carved propeller does.
 
-use super::balance::{balance, resultant};
+use super::balance::{balance, resultant, track_moments};
 use super::measured::{Measured, Size, propeller};
 use super::{CarvedError, doubts};
 use crate::fit;
@@ -29,8 +29,11 @@ pub fn analysed(rig: &Rig, measured: &Measured) -> Result<Carved, CarvedError> {
     let set = Set::new(rig, measured)?;
     let rotors: Vec<Rotor> = set.blades.iter().map(|b| b.rotor.clone()).collect();
     let balance = balance(rig, readings, &set.blades)?;
-    let moments: Vec<f64> = balance.blades.iter().map(|m| m.moment_kg_m).collect();
-    let point = |p: &FlightPoint| carved_point(rig, &set, &rotors, &moments, p);
+    let masses = Masses {
+        moments_kg_m: balance.blades.iter().map(|m| m.moment_kg_m).collect(),
+        ahead_kg_m2: track_moments(rig, readings, &set.blades, balance.density_kg_m3)?,
+    };
+    let point = |p: &FlightPoint| carved_point(rig, &set, &rotors, &masses, p);
     Ok(Carved {
         spokeshave: crate::job::VERSION,
         title: rig.job.title.clone(),
@@ -40,6 +43,14 @@ pub fn analysed(rig: &Rig, measured: &Measured) -> Result<Carved, CarvedError> {
         balance,
         doubts: doubts(rig),
     })
+}
+
+/// How the blades' masses lie.
+struct Masses {
+    /// Mass moment about the axis of each.
+    moments_kg_m: Vec<f64>,
+    /// The same by how far they lie ahead of the plane of the hub, where track was read.
+    ahead_kg_m2: Option<Vec<f64>>,
 }
 
 /// The propellers of the mean and of each blade.
@@ -108,11 +119,11 @@ fn blades(rig: &Rig, readings: &Readings, measured: &Measured) -> Vec<CarvedBlad
     measured.blades.iter().enumerate().map(blade).collect()
 }
 
-fn carved_point(rig: &Rig, set: &Set, rotors: &[Rotor], moments: &[f64], point: &FlightPoint) -> CarvedPoint {
+fn carved_point(rig: &Rig, set: &Set, rotors: &[Rotor], masses: &Masses, point: &FlightPoint) -> CarvedPoint {
     let condition = |rig: &Rig| fit::condition(rig, point, air_of(point).ok()?).ok();
     let (as_drawn, as_carved) = (condition(rig), condition(&set.mean));
     let loads = as_carved.map_or_else(Vec::new, |at| loads(&set.mean.rotor, rotors, &at));
-    let once = as_carved.filter(|_| rotors.len() > 1).map(|at| once_per_turn(&loads, moments, &at));
+    let once = as_carved.filter(|_| rotors.len() > 1).map(|at| once_per_turn(&loads, masses, &at));
     let departure = |r: f64| StationDeparture {
         radius_m: r,
         drawn_deg: as_drawn.and_then(|at| rig.rotor.departure_deg(&rig.rotor, r, &at)),
@@ -141,15 +152,19 @@ fn loads(mean: &Rotor, rotors: &[Rotor], at: &Condition) -> Vec<LoadOf> {
 }
 
 /// The resultants of forces and moments that turn with the propeller.
-fn once_per_turn(loads: &[LoadOf], moments: &[f64], at: &Condition) -> OncePerTurn {
+fn once_per_turn(loads: &[LoadOf], masses: &Masses, at: &Condition) -> OncePerTurn {
     let size = |of: fn(&LoadOf) -> f64| {
         let (x, y) = resultant(&loads.iter().map(of).collect::<Vec<_>>());
         x.hypot(y)
     };
-    let (x, y) = resultant(moments);
+    let turning = |of: &[f64]| {
+        let (x, y) = resultant(of);
+        x.hypot(y) * at.rotation_rad_s.powi(2)
+    };
     OncePerTurn {
         moment_n_m: size(|l| l.bending_n_m),
         air_force_n: size(|l| l.drag_n),
-        mass_force_n: x.hypot(y) * at.rotation_rad_s.powi(2),
+        mass_force_n: turning(&masses.moments_kg_m),
+        track_moment_n_m: masses.ahead_kg_m2.as_deref().map(turning),
     }
 }

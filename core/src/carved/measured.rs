@@ -6,6 +6,7 @@ use crate::result::Known;
 use crate::rig::Rig;
 
 use super::CarvedError;
+use super::doubt::believed;
 
 /// A reading this near to a station was taken there, m.
 const AT_STATION_M: f64 = 1e-3;
@@ -40,14 +41,16 @@ impl Measured {
     /// The blades of a job's readings.
     ///
     /// # Errors
-    /// No reading at all.
+    /// No reading at all, or none that is believed.
     pub fn new(rig: &Rig) -> Result<Self, CarvedError> {
-        let carved = rig.job.carved.as_ref().ok_or(CarvedError::NoReadings)?;
+        let given = rig.job.carved.as_ref().ok_or(CarvedError::NoReadings)?;
+        let carved = &believable(rig, given);
         let read: Vec<bool> = (0..rig.job.propeller.blades as usize)
             .map(|b| carved.blades.get(b).is_some_and(|blade| blade.readings.iter().any(tells)))
             .collect();
         if !read.contains(&true) {
-            return Err(CarvedError::NoReadings);
+            let any = given.blades.iter().flat_map(|b| &b.readings).any(tells);
+            return Err(if any { CarvedError::NoneBelieved } else { CarvedError::NoReadings });
         }
         let radii_m = radii(rig, carved);
         let own = |b: usize| read[b].then(|| blade(rig, carved, &carved.blades[b].readings, &radii_m));
@@ -65,6 +68,15 @@ impl Measured {
     pub fn mean(&self) -> Vec<Size> {
         (0..self.radii_m.len()).map(|s| mean(self.blades.iter().map(|b| b[s]))).collect()
     }
+}
+
+/// The readings without what is hard to believe of them and was not confirmed.
+fn believable(rig: &Rig, given: &Carved) -> Carved {
+    let mut carved = given.clone();
+    for reading in carved.blades.iter_mut().flat_map(|b| &mut b.readings) {
+        *reading = believed(rig, given.angle_reference, reading);
+    }
+    carved
 }
 
 fn tells(reading: &BladeReading) -> bool {

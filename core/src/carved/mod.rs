@@ -3,7 +3,7 @@
 //! Readings of blade angle, chord and thickness by blade and radius stand in the job (`carved`) or come as a sheet
 //! ([`import`]). Between readings, and where one is missing, the *difference from the drawing* is interpolated by a
 //! monotone cubic over the radius and held beyond the outermost readings; a blade without any reading is taken as the
-//! mean of the others. The propeller of mean blades is matched with engine and aircraft like the drawn one; each blade's
+//! mean of the others. What is hard to believe ([`doubts`]) is left out until it is confirmed. The propeller of mean blades is matched with engine and aircraft like the drawn one; each blade's
 //! own load is worked out in the flow of that ([`crate::rotor::Rotor::blade_loads`]).
 //!
 //! What can be put right is in [`plan()`]: wood only comes off.
@@ -37,6 +37,11 @@ pub enum CarvedError {
     /// No readings.
     #[error("the job has no readings of carved blades: key carved")]
     NoReadings,
+    /// Readings of which none is believed.
+    #[error(
+        "every reading is hard to believe and none is confirmed; doubts tell why: mend them, or confirm those that are right"
+    )]
+    NoneBelieved,
     /// A flight point without an answer for the drawn blade.
     #[error("{0} has no answer with the drawn blade; the removals are judged at a flight point that has one")]
     NoAnswer(String),

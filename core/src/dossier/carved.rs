@@ -29,7 +29,8 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     if !carved.doubts.is_empty() {
         flow.heading("Hard to believe");
         let said = |d: &crate::result::Doubt| {
-            format!("Blade {}, {}: {}.", d.blade, length.say(d.radius_m), d.message)
+            let counts = if d.counted { "counted, as confirmed" } else { "left out" };
+            format!("Blade {}, {}: {}; {counts}.", d.blade, length.say(d.radius_m), d.message)
         };
         flow.list(&carved.doubts.iter().map(said).collect::<Vec<_>>());
     }
@@ -105,28 +106,32 @@ fn does(flow: &mut Flow, carved: &Carved, plan: Option<&RemovalPlan>, scales: &S
     });
     verdict::points(flow, &rows.flatten().collect::<Vec<Brief>>(), scales, Some(names));
     flow.heading("What shakes once per turn");
-    let moment = format!("moment across\nthe shaft, {}", scales.torque.sign);
+    let moments = ["of the thrusts", "of the track"].map(|w| format!("moment\n{w}, {}", scales.torque.sign));
     let forces = ["of the air", "of the masses"].map(|w| format!("force\n{w}, {}", scales.force.sign));
-    let each = format!("thrust of each blade, {}", scales.force.sign);
     let columns = [
-        words("flight point", 50.0),
-        figures(&moment, 30.0),
-        figures(&forces[0], 30.0),
-        figures(&forces[1], 34.0),
-        words(&each, 44.0),
+        words("flight point", 46.0),
+        figures(&moments[0], 30.0),
+        figures(&moments[1], 28.0),
+        figures(&forces[0], 26.0),
+        figures(&forces[1], 30.0),
     ];
     let row = |p: &CarvedPoint| {
         let once = p.once_per_turn;
-        let thrusts: Vec<String> = p.blades.iter().map(|b| scales.force.figure(b.thrust_n)).collect();
         vec![
             p.drawn.name.clone(),
             scales.torque.figure(once.map(|o| o.moment_n_m)),
+            scales.torque.figure(once.and_then(|o| o.track_moment_n_m)),
             scales.force.figure(once.map(|o| o.air_force_n)),
             scales.force.figure(once.map(|o| o.mass_force_n)),
-            thrusts.join("; "),
         ]
     };
     flow.table(&columns, &carved.flight_points.iter().map(row).collect::<Vec<_>>());
+    let each = |p: &CarvedPoint| {
+        let thrusts: Vec<String> = p.blades.iter().map(|b| scales.force.figure(b.thrust_n)).collect();
+        format!("{}: thrust of each blade {} {}.", p.drawn.name, thrusts.join(", "), scales.force.sign)
+    };
+    let known = carved.flight_points.iter().filter(|p| !p.blades.is_empty());
+    flow.list(&known.map(each).collect::<Vec<_>>());
 }
 
 fn balance(flow: &mut Flow, carved: &Carved, scales: &Scales) {

@@ -60,7 +60,12 @@ fn readings(flow: &mut Flow, all: &[LogReading], scales: &Scales) {
 fn residuals(logged: &Logged) -> Chart {
     let curve = |name: &str, of: fn(&LogLine) -> Option<f64>| {
         let points = logged.readings.iter().enumerate();
-        Curve::new(name, points.map(|(i, l)| (i as f64 + 1.0, of(l).map(|rpm| l.engine_rpm - rpm))))
+        Curve::new(
+            name,
+            points.map(|(i, l)| {
+                (i as f64 + 1.0, of(l).zip(l.engine_rpm).map(|(expected, read)| read - expected))
+            }),
+        )
     };
     Chart {
         title: "Engine rpm read less rpm expected".into(),

@@ -79,7 +79,7 @@ struct Here {
 }
 
 impl<'r> Equation<'r> {
-    /// `None` where the reading tells nothing: no engine, an air or a load that has no answer, neither full throttle nor level flight
+    /// `None` where the reading tells nothing: no engine, no rpm, an air or a load that has no answer, neither full throttle nor level flight
     /// nor a consumption.
     pub(super) fn new(rig: &'r Rig, reading: &LogReading) -> Option<Self> {
         let shaft = rig.shaft.as_ref()?;
@@ -90,7 +90,7 @@ impl<'r> Equation<'r> {
             air: air(reading)?,
             throttle: reading.throttle.unwrap_or(0.0),
             measured,
-            read: (reading.engine_rpm / shaft.gear_ratio(), reading.airspeed_m_s),
+            read: (reading.engine_rpm? / shaft.gear_ratio(), reading.airspeed_m_s),
             told: Vec::new(),
             at: (1.0, 1.0),
             shift: Vec::new(),

@@ -104,7 +104,7 @@ fn one(sheet: &Sheet, row: &Row) -> Result<LogReading, SheetError> {
         pressure_pa,
         temperature_c: sheet.figure(row, "temperature")?.map(|c| (c * 1e6).round() / 1e6),
         airspeed_m_s,
-        engine_rpm,
+        engine_rpm: Some(engine_rpm),
         throttle: throttle(sheet, row)?,
         level,
         fuel_kg_per_h: sheet.figure(row, "fuel")?,

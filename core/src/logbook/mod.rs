@@ -7,7 +7,8 @@
 //! reading share, give their covariance, taken where the reading most likely was. Least squares with the prior widths of the job ([`crate::job::Widths`]) by Gauss
 //! and Newton; uncertainties from the inverse of the normal matrix. Readings that stay far off are flagged and left out.
 //!
-//! The propeller is the carved one where the job has readings of it. A governor hides what a constant-speed propeller takes.
+//! The propeller is the carved one where the job has readings of it. At the governed rpm a governor hides what a constant-speed propeller
+//! takes; below it the blades are on the fine stop, and the reading tells as much as that of a fixed pitch.
 
 mod equation;
 pub mod import;
@@ -48,7 +49,10 @@ pub enum LogbookError {
     #[error("the job has no engine, so that its readings cannot be judged")]
     NoEngine,
     /// A governor.
-    #[error("a governor holds the rpm of this propeller, so that rpm says nothing of power or drag")]
+    #[error(
+        "a governor holds the rpm of this propeller and no reading is below it, so that the angle of the blades is not known; log a run at full \
+         throttle, or level flight, that stays below the governed rpm with the blades on the fine stop"
+    )]
     Governed,
     /// No reading tells anything.
     #[error(
@@ -60,43 +64,81 @@ pub enum LogbookError {
 /// What the readings of a job tell.
 ///
 /// # Errors
-/// No readings, no engine, a constant-speed propeller, no reading that tells anything.
+/// No readings, no engine, only readings at the governed rpm, no reading that tells anything.
 pub fn estimate(rig: &Rig) -> Result<Logged, LogbookError> {
     let logbook =
         rig.job.logbook.as_ref().filter(|l| !l.readings.is_empty()).ok_or(LogbookError::NoReadings)?;
     if rig.shaft.is_none() {
         return Err(LogbookError::NoEngine);
     }
-    if matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. }) {
-        return Err(LogbookError::Governed);
-    }
-    let (before, as_carved) = flown(&rig.job, &Factors::default()).ok_or(LogbookError::NothingTold)?;
-    let equation = |r: &LogReading| if r.left_out { None } else { Equation::new(&before, r) };
+    let governed = Governed::of(&rig.job);
+    let read = governed.as_ref().map_or(&rig.job, |g| &g.on_stop);
+    let (before, as_carved) = flown(read, &Factors::default()).ok_or(LogbookError::NothingTold)?;
+    let hidden = |r: &LogReading| governed.as_ref().is_some_and(|g| g.hides(&before, r));
+    let equation = |r: &LogReading| if r.left_out || hidden(r) { None } else { Equation::new(&before, r) };
     let mut equations: Vec<Option<Equation>> = logbook.readings.iter().map(equation).collect();
     if equations.iter().all(Option::is_none) {
-        return Err(LogbookError::NothingTold);
+        return Err(if logbook.readings.iter().any(hidden) {
+            LogbookError::Governed
+        } else {
+            LogbookError::NothingTold
+        });
     }
     let w = &logbook.widths;
     let widths = [w.engine_power, w.drag_area, w.propeller_power, w.consumption];
     let found = solve(&mut equations, &widths).ok_or(LogbookError::NothingTold)?;
     let factors = factors(&found.x);
-    let (after, _) = flown(&rig.job, &factors).ok_or(LogbookError::NothingTold)?;
+    let (after, _) = flown(read, &factors).ok_or(LogbookError::NothingTold)?;
     let pairs = pairs(&found, &widths);
     let all = factors_found(&found, &widths);
     let remarks = remark::of_all(&equations, &all, &pairs);
-    let line = |(i, r): (usize, &LogReading)| line(&before, &after, r, equations[i].as_ref(), found.off[i]);
+    let line = |(i, r): (usize, &LogReading)| {
+        let line = line(&before, &after, r, equations[i].as_ref(), found.off[i]);
+        if hidden(r) && !r.left_out { LogLine { remark: HIDDEN.into(), ..line } } else { line }
+    };
+    let points = |factors: &Factors| flown(&rig.job, factors).map_or_else(Vec::new, |(rig, _)| briefs(&rig));
     Ok(Logged {
         spokeshave: crate::job::VERSION,
         title: rig.job.title.clone(),
         as_carved,
         readings: logbook.readings.iter().enumerate().map(line).collect(),
-        flight_points: briefs(&before)
+        flight_points: points(&Factors::default())
             .into_iter()
-            .zip(briefs(&after))
+            .zip(points(&factors))
             .map(|(drawn, shaped)| Compared { drawn, shaped })
             .collect(),
         estimate: Estimate { factors, widths: *w, found: all, pairs, remarks },
     })
+}
+
+/// What is said of a reading at the governed rpm.
+const HIDDEN: &str = "tells nothing: at the governed rpm the angle of the blades is not known; one below it, on the fine stop, would tell";
+/// Share of the governed rpm below which the blades are on the fine stop.
+const BELOW: f64 = 0.985;
+
+/// A propeller whose rpm a governor holds.
+struct Governed {
+    /// Governed propeller rpm.
+    rpm: f64,
+    /// The job with the blades set on the fine stop.
+    on_stop: Job,
+}
+
+impl Governed {
+    fn of(job: &Job) -> Option<Self> {
+        let PitchControl::ConstantSpeed { rpm, turn_min_deg, .. } = job.propeller.pitch_control else {
+            return None;
+        };
+        let mut on_stop = job.clone();
+        on_stop.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: turn_min_deg };
+        Some(Self { rpm, on_stop })
+    }
+
+    /// Whether the governor may have turned the blades.
+    fn hides(&self, rig: &Rig, r: &LogReading) -> bool {
+        let gear = rig.shaft.as_ref().map_or(1.0, crate::engine::Shaft::gear_ratio);
+        r.engine_rpm.is_some_and(|rpm| rpm / gear > BELOW * self.rpm)
+    }
 }
 
 /// The job as flown, with factors: with the carved propeller, where it was measured.
@@ -137,7 +179,7 @@ fn line(before: &Rig, after: &Rig, r: &LogReading, equation: Option<&Equation>, 
     let expected = |rig: &Rig| Some(gear * fit::rpm_of(&expected(rig, r)?));
     let consumed = |rig: &Rig| {
         let (shaft, air) = (rig.shaft.as_ref()?, equation::air(r)?);
-        let rpm = r.engine_rpm / gear;
+        let rpm = r.engine_rpm? / gear;
         let (rotation_rad_s, turn_rad) = (rotation_rad_s(rpm), rig.turn_rad());
         let at = Condition { air, airspeed_m_s: r.airspeed_m_s, rotation_rad_s, turn_rad };
         let power_w = rig.rotor.loads(&at).torque_n_m * rotation_rad_s;

@@ -20,16 +20,17 @@ pub(super) fn of_all(equations: &[Option<Equation>], found: &[FactorFound], pair
     }
     if !tells(Told::Consumption) {
         remarks.push(
-            "No fuel flow or current was read, so that engine and propeller are known by the quotient of their powers only."
+            "No fuel flow or current was read: rpm alone tells how strong the engine is for this propeller, not whether the engine is weak or \
+             the propeller heavy to turn."
                 .to_string(),
         );
     }
     for pair in pairs {
-        let how = if pair.correlation > 0.0 { "over" } else { "times" };
+        let how = if pair.correlation > 0.0 { "divided by" } else { "multiplied by" };
         remarks.push(format!(
-            "{} and {} cannot be told apart; {} {how} {} is {:.3} ± {:.3}.",
+            "{} and {} cannot be told apart; what is known is {} {how} {}: {:.3} ± {:.3} of the job's figures.",
             words(pair.first),
-            words(pair.second),
+            words(pair.second).to_lowercase(),
             words(pair.first).to_lowercase(),
             words(pair.second).to_lowercase(),
             pair.value,
@@ -51,7 +52,7 @@ fn words(name: &str) -> &'static str {
     match name {
         "engine_power" => "Engine power",
         "drag_area" => "Drag area",
-        "propeller_power" => "Propeller power",
+        "propeller_power" => "Power to turn the propeller",
         _ => "Consumption",
     }
 }
@@ -67,6 +68,7 @@ pub(super) fn of_reading(
     if r.left_out {
         return "left out".into();
     }
+    let Some(engine_rpm) = r.engine_rpm else { return "tells nothing: no rpm was read".into() };
     if !tells {
         let piston = matches!(rig.shaft, Some(Shaft::Piston(_)));
         return if piston && r.throttle.is_some_and(|t| t < 1.0) {
@@ -81,11 +83,11 @@ pub(super) fn of_reading(
     }
     let (Some(expected), Some(shaft)) = (expected_rpm, &rig.shaft) else { return "far off".into() };
     let near = |value: f64| (value / expected - 1.0).abs() < NEAR;
-    let cause = if near(r.engine_rpm * shaft.gear_ratio()) && (shaft.gear_ratio() - 1.0).abs() > 2.0 * NEAR {
+    let cause = if near(engine_rpm * shaft.gear_ratio()) && (shaft.gear_ratio() - 1.0).abs() > 2.0 * NEAR {
         "perhaps it is the propeller's rpm, not the engine's"
-    } else if near(10.0 * r.engine_rpm) || near(100.0 * r.engine_rpm) {
+    } else if near(10.0 * engine_rpm) || near(100.0 * engine_rpm) {
         "perhaps the dial counts tens or hundreds"
-    } else if near(2.0 * r.engine_rpm) || near(0.5 * r.engine_rpm) {
+    } else if near(2.0 * engine_rpm) || near(0.5 * engine_rpm) {
         "perhaps the tachometer is set to another number of blades or pulses"
     } else if r.airspeed_m_s > 0.0 {
         "perhaps the airspeed is in another unit, or is not the true one; or it was not steady"

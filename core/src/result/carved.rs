@@ -134,6 +134,8 @@ pub struct OncePerTurn {
     pub air_force_n: f64,
     /// Force across the shaft by unequal masses, N: unbalance times the square of the speed of rotation.
     pub mass_force_n: f64,
+    /// Moment across the shaft by blades whose masses lie ahead of one another, N m; `None` where no track was read.
+    pub track_moment_n_m: Option<f64>,
 }
 
 /// Departures at one radius, degrees.
@@ -178,10 +180,14 @@ pub struct MassOf {
 pub struct Doubt {
     /// Blade, from 1.
     pub blade: usize,
+    /// Its number among the readings of the blade, from 1.
+    pub reading: usize,
     /// Radius, m.
     pub radius_m: f64,
     /// What it is about, and the likely cause.
     pub message: String,
+    /// Whether it counts all the same, for it was confirmed; otherwise it is left out.
+    pub counted: bool,
 }
 
 /// What to take off, and what comes of it.

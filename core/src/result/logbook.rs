@@ -70,8 +70,8 @@ pub struct Pair {
 /// One reading beside what is expected.
 #[derive(Clone, Debug, PartialEq, Serialize)]
 pub struct LogLine {
-    /// Engine rpm as read.
-    pub engine_rpm: f64,
+    /// Engine rpm as read, where it was.
+    pub engine_rpm: Option<f64>,
     /// Engine rpm expected without the factors.
     pub before_rpm: Option<f64>,
     /// Engine rpm expected with the factors.

@@ -1,5 +1,7 @@
 //! Readings typed at the bench and out of the logbook.
 
+use spokeshave::job::LogReading;
+
 use super::*;
 
 fn typed(state: &State, field: Field, text: &str) -> State {
@@ -35,16 +37,28 @@ fn an_impossible_angle_is_refused_with_its_likely_cause_and_changes_nothing() {
 }
 
 #[test]
+fn a_doubted_reading_is_confirmed_until_it_is_typed_anew() {
+    let field = Field::Reading(1, 7, BladeFigure::Angle);
+    let read = typed(&State::new(Job::from_json(DEMOS[0].json).unwrap()), field, "71");
+    let confirmed = |state: &State| state.job().carved.as_ref().unwrap().blades[1].readings[0].confirmed;
+    let choice = Choice::Carved(CarvedChoice::Confirm(1, 0, true));
+    let right = read.after(Action::Choose(choice, Running::default()));
+    assert!(!confirmed(&read) && confirmed(&right));
+    assert!(!confirmed(&typed(&right, field, "70")));
+}
+
+#[test]
 fn a_reading_of_the_logbook_is_added_typed_and_removed() {
     let choose = |state: &State, choice: LogbookChoice| {
         state.after(Action::Choose(Choice::Logbook(choice), Running::default()))
     };
     let start = State::new(Job::from_json(DEMOS[0].json).unwrap());
     let one = choose(&start, LogbookChoice::Add);
+    assert_eq!(one.job().logbook.as_ref().unwrap().readings[0], LogReading::default());
     let read =
         typed(&typed(&one, Field::Log(0, LogFigure::Rpm), "2950"), Field::Log(0, LogFigure::Throttle), "100");
     let reading = &read.job().logbook.as_ref().unwrap().readings[0];
-    assert_eq!((reading.engine_rpm, reading.throttle), (2950.0, Some(1.0)));
+    assert_eq!((reading.engine_rpm, reading.throttle), (Some(2950.0), Some(1.0)));
     let level = choose(&read, LogbookChoice::Level(0, true));
     assert!(level.notice.is_some(), "level flight needs an airspeed");
     let gone = choose(&read, LogbookChoice::Remove(0));

@@ -73,6 +73,9 @@ pub struct EntryProps {
     /// What stands in the empty box.
     #[prop_or_default]
     pub hint: AttrValue,
+    /// What the Enter key of a keyboard on the screen says.
+    #[prop_or("done")]
+    pub enter: &'static str,
 }
 
 /// A bare box: its name is spoken, its message stands where the caller puts it.
@@ -91,7 +94,7 @@ pub fn Entry(props: &EntryProps) -> Html {
     });
     let mode = if props.is_text { "text" } else { "decimal" };
     html! {
-        <input type="text" inputmode={mode} class={classes!("entry", wrong.then_some("wrong"), props.class.clone())}
+        <input type="text" inputmode={mode} enterkeyhint={props.enter} class={classes!("entry", wrong.then_some("wrong"), props.class.clone())}
             value={shown.text.clone()} placeholder={props.hint.clone()} aria-label={shown.name.clone()} autocomplete="off" spellcheck="false"
             aria-invalid={wrong.then_some("true")} aria-describedby={wrong.then(|| shown.message_id())}
             {oninput} {onchange} {onkeydown} />

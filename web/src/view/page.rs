@@ -138,7 +138,7 @@ fn Panels(props: &PageProps) -> Html {
             <Workshop number={10} rig={later.rig.clone()} unit={state.units.length} />
             <Panel id="carved" number={11} title="As carved" open=false onunfold={act.on(|open| Action::Unfold(Part::Carved, open))}
                 result={carved::in_a_line(state, later.carved.as_deref())}>
-                <CarvedPanel state={state.part(carved::same_carved)} found={later.carved.clone()} />
+                <CarvedPanel state={state.part(carved::same_carved)} found={later.carved.clone()} rig={later.rig.clone()} />
             </Panel>
             <Panel id="logbook" number={12} title="Logbook" open=false onunfold={act.on(|open| Action::Unfold(Part::Logbook, open))}
                 result={logbook::in_a_line(state)}>

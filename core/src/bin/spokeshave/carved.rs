@@ -8,6 +8,7 @@ use serde::Serialize;
 use spokeshave::carved::{self, CarvedError, import};
 use spokeshave::job::Job;
 use spokeshave::result::{Carved, RemovalPlan};
+use spokeshave::rig::Rig;
 use spokeshave::sheet::SheetError;
 
 use crate::input::{Format, JobSource, Outcome, Stop, point_index, print, print_csv, print_json, with_sheet};
@@ -16,8 +17,8 @@ use crate::input::{Format, JobSource, Outcome, Stop, point_index, print, print_c
 #[command(
     after_help = "READINGS is a sheet with headings: blade, radius_mm (or station, the share of the tip radius), face angle or
 chord-line angle or angle (degrees, or degrees and minutes as in 18 30), chord_mm, thickness_mm, track_mm. Anything but the
-place may be missing; between readings the difference from the drawing is interpolated. Wood only comes off: the plan never
-asks for adding any.
+place may be missing; between readings the difference from the drawing is interpolated. What is hard to believe is told and left
+out; --confirm counts it. Wood only comes off: the plan never asks for adding any.
 
 Example:
   spokeshave carved JOB.json --readings READINGS.csv --point Cruise"
@@ -31,6 +32,9 @@ pub(crate) struct Args {
     /// The flight point at which departure is to be restored; without it the first in flight
     #[arg(long)]
     point: Option<String>,
+    /// Count what is hard to believe as well: the readings were looked at again and are right
+    #[arg(long)]
+    confirm: bool,
     #[command(flatten)]
     format: Format,
     /// The whole job with the readings in it, as a job file
@@ -45,7 +49,10 @@ struct Both<'a> {
 }
 
 pub(crate) fn run(args: &Args) -> Outcome {
-    let rig = with_sheet(args.source.rig()?, args.readings.as_ref(), put)?;
+    let mut rig = with_sheet(args.source.rig()?, args.readings.as_ref(), put)?;
+    if args.confirm {
+        confirm(&mut rig);
+    }
     if args.job {
         print(&rig.job.to_json())?;
         return Ok(true);
@@ -71,6 +78,15 @@ pub(crate) fn run(args: &Args) -> Outcome {
         print(&print::text(&found, plan.as_ref()))?;
     }
     Ok(plan.is_some())
+}
+
+/// What is hard to believe was looked at again.
+fn confirm(rig: &mut Rig) {
+    let doubts = carved::doubts(rig);
+    let Some(carved) = &mut rig.job.carved else { return };
+    for doubt in doubts {
+        carved.blades[doubt.blade - 1].readings[doubt.reading - 1].confirmed = true;
+    }
 }
 
 /// The readings of a sheet, put into a job.

@@ -67,7 +67,7 @@ fn check_air(found: &mut Found, at: &impl Fn(&str) -> String, r: &LogReading) {
 
 fn check_running(found: &mut Found, at: &impl Fn(&str) -> String, r: &LogReading) {
     found.range(at("airspeed_m_s"), r.airspeed_m_s, 0.0..=340.0, "m/s");
-    found.range(at("engine_rpm"), r.engine_rpm, 10.0..=200_000.0, "rpm");
+    found.optional(at("engine_rpm"), r.engine_rpm, 10.0..=200_000.0, "rpm");
     if let Some(throttle) = r.throttle.filter(|t| !(0.0..=1.0).contains(t)) {
         let hint = likely(throttle, 0.01..=1.0, &[(0.01, "%")]);
         found.refuse(at("throttle"), throttle, format!("0 to 1{hint}"));

@@ -54,6 +54,9 @@ pub struct BladeReading {
     /// How far the blade lies ahead of the plane of the hub, m.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub track_m: Option<f64>,
+    /// Whether what is hard to believe of it was looked at again and is right; otherwise that is left out.
+    #[serde(default, skip_serializing_if = "std::ops::Not::not")]
+    pub confirmed: bool,
 }
 
 impl Default for Carved {

@@ -41,8 +41,9 @@ pub struct LogReading {
     /// True airspeed, m/s; 0 for a ground run.
     #[serde(default)]
     pub airspeed_m_s: f64,
-    /// Engine or motor rpm.
-    pub engine_rpm: f64,
+    /// Engine or motor rpm; a reading without it tells nothing yet.
+    #[serde(default, skip_serializing_if = "Option::is_none")]
+    pub engine_rpm: Option<f64>,
     /// Throttle, 1 for full; without it nothing is known of it.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub throttle: Option<f64>,

@@ -88,6 +88,8 @@ impl BladeFigure {
             readings.insert(at, BladeReading { radius_m, ..BladeReading::default() });
         }
         *self.place(&mut readings[at]) = Some(value);
+        // Another figure is another reading.
+        readings[at].confirmed = false;
         true
     }
 
@@ -102,6 +104,7 @@ impl BladeFigure {
             blade.readings.get_mut(at).filter(|r| (r.radius_m - radius).abs() <= AT_STATION_M)
         {
             *self.place(reading) = None;
+            reading.confirmed = false;
             if *reading == (BladeReading { radius_m: reading.radius_m, ..BladeReading::default() }) {
                 blade.readings.remove(at);
             }

@@ -11,6 +11,8 @@ pub enum CarvedChoice {
     Reference(AngleReference),
     /// The readings of a sheet.
     Readings(Box<Carved>),
+    /// Whether what is hard to believe of a reading counts: blade and reading, from 0.
+    Confirm(usize, usize, bool),
     /// All readings are taken out.
     Clear,
 }
@@ -18,7 +20,7 @@ pub enum CarvedChoice {
 /// A choice about the logbook.
 #[derive(Clone, Debug, PartialEq)]
 pub enum LogbookChoice {
-    /// A reading more, like the last one.
+    /// A reading more, nothing in it.
     Add,
     /// A reading less.
     Remove(usize),
@@ -39,6 +41,8 @@ impl CarvedChoice {
         match self {
             Self::Reference(_) => "what the angles were read on",
             Self::Readings(_) => "readings of a sheet",
+            Self::Confirm(.., true) => "a reading is right",
+            Self::Confirm(.., false) => "a reading is left out",
             Self::Clear => "take out the readings of the blades",
         }
         .into()
@@ -51,6 +55,12 @@ impl CarvedChoice {
                 job.carved.get_or_insert(started).angle_reference = *to;
             }
             Self::Readings(carved) => job.carved = Some(carved.as_ref().clone()),
+            Self::Confirm(blade, reading, on) => {
+                let blade = job.carved.as_mut().and_then(|c| c.blades.get_mut(*blade));
+                if let Some(reading) = blade.and_then(|b| b.readings.get_mut(*reading)) {
+                    reading.confirmed = *on;
+                }
+            }
             Self::Clear => job.carved = None,
         }
     }
@@ -74,9 +84,7 @@ impl LogbookChoice {
         let logbook = job.logbook.get_or_insert_with(Logbook::default);
         match self {
             Self::Add => {
-                let usual = LogReading { engine_rpm: 2_500.0, throttle: Some(1.0), ..LogReading::default() };
-                let like = logbook.readings.last().cloned().unwrap_or(usual);
-                logbook.readings.push(LogReading { note: String::new(), left_out: false, ..like });
+                logbook.readings.push(LogReading::default());
             }
             Self::Remove(i) if *i < logbook.readings.len() => drop(logbook.readings.remove(*i)),
             Self::Level(i, on) => {

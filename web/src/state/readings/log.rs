@@ -25,7 +25,8 @@ pub enum LogFigure {
 
 /// Where a figure stands in a reading.
 enum Place<'a> {
-    Needed(&'a mut f64),
+    /// Nothing stands for rest.
+    OrRest(&'a mut f64),
     Optional(&'a mut Option<f64>),
 }
 
@@ -72,8 +73,8 @@ impl LogFigure {
 
     fn place(self, r: &mut LogReading) -> Place<'_> {
         match self {
-            Self::Rpm => Place::Needed(&mut r.engine_rpm),
-            Self::Airspeed => Place::Needed(&mut r.airspeed_m_s),
+            Self::Rpm => Place::Optional(&mut r.engine_rpm),
+            Self::Airspeed => Place::OrRest(&mut r.airspeed_m_s),
             Self::Throttle => Place::Optional(&mut r.throttle),
             Self::Altitude => Place::Optional(&mut r.altitude_m),
             Self::Temperature => Place::Optional(&mut r.temperature_c),
@@ -86,7 +87,7 @@ impl LogFigure {
     pub(in crate::state) fn value(self, job: &Job, i: usize) -> Option<f64> {
         let mut reading = job.logbook.as_ref()?.readings.get(i)?.clone();
         match self.place(&mut reading) {
-            Place::Needed(value) => Some(*value),
+            Place::OrRest(value) => Some(*value).filter(|v| *v != 0.0),
             Place::Optional(value) => *value,
         }
     }
@@ -98,21 +99,19 @@ impl LogFigure {
             reading.pressure_pa = None;
         }
         match self.place(reading) {
-            Place::Needed(place) => *place = value,
+            Place::OrRest(place) => *place = value,
             Place::Optional(place) => *place = Some(value),
         }
         true
     }
 
-    /// Takes the figure out; whether a reading may go without it.
+    /// Takes the figure out; whether there is such a reading.
     pub(in crate::state) fn clear(self, job: &mut Job, i: usize) -> bool {
         let Some(reading) = job.logbook.as_mut().and_then(|l| l.readings.get_mut(i)) else { return false };
         match self.place(reading) {
-            Place::Needed(_) => false,
-            Place::Optional(place) => {
-                *place = None;
-                true
-            }
+            Place::OrRest(place) => *place = 0.0,
+            Place::Optional(place) => *place = None,
         }
+        true
     }
 }

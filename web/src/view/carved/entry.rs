@@ -1,27 +1,31 @@
 //! Boxes for one blade: large, in columns, the next one down on Enter.
 
+use spokeshave::result::Doubt;
 use wasm_bindgen::JsCast;
 use web_sys::{Element, HtmlInputElement};
 use yew::prelude::*;
 
-use crate::number::figure;
-use crate::state::{BladeFigure, Field};
+use super::choose;
+use crate::number::{figure, with_unit};
+use crate::state::{BladeFigure, CarvedChoice, Field, State};
 use crate::units::Quantity;
-use crate::view::Seen;
 use crate::view::form::{Entry, Message, Shown};
+use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`BladeEntry`].
 #[derive(Properties, PartialEq)]
 pub(super) struct BladeEntryProps {
     /// Which blade, from 0.
     pub(super) blade: usize,
+    /// What is hard to believe of it.
+    pub(super) doubts: Vec<Doubt>,
     pub(super) state: Seen,
 }
 
 /// The boxes of a blade.
 #[component]
 pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
-    let (state, blade) = (&props.state, props.blade);
+    let (act, state, blade) = (use_act(), &props.state, props.blade);
     let stations = state.job().propeller.stations.len();
     let shown = |figure: BladeFigure| -> Vec<Shown> {
         (0..stations).map(|s| Shown::of(state, &[], Field::Reading(blade, s, figure))).collect()
@@ -39,7 +43,7 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
         html! {
             <div class="carved-column">
                 <span class="carved-head">{ f.name() }<small>{ unit(f.quantity()) }</small></span>
-                { for boxes.iter().map(|s| html! { <Entry shown={s.clone()} /> }) }
+                { for boxes.iter().map(|s| html! { <Entry shown={s.clone()} enter="next" /> }) }
             </div>
         }
     };
@@ -55,7 +59,26 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
                 { for BladeFigure::ALL.iter().zip(&columns).map(column) }
             </div>
             { for wrong.map(|s| html! { <Message shown={s.clone()} named=true /> }) }
+            { for props.doubts.iter().map(|d| doubted(&act, state, d)) }
         </fieldset>
+    }
+}
+
+/// What is hard to believe, that it is left out, and a button to count it.
+fn doubted(act: &Act, state: &State, d: &Doubt) -> Html {
+    let (blade, reading, counts) = (d.blade - 1, d.reading - 1, !d.counted);
+    let (said, label) = if d.counted {
+        ("It counts, for you said that it is right.", "Leave it out")
+    } else {
+        ("Left out until it is mended or you say that it is right.", "It is right: count it")
+    };
+    let place = with_unit(state.units, Quantity::Length, Some(d.radius_m));
+    let onclick = choose(act, move |_: MouseEvent| CarvedChoice::Confirm(blade, reading, counts));
+    html! {
+        <div class="doubts" role="status">
+            <p>{ format!("Hard to believe at {place}: {}. {said}", d.message) }</p>
+            <button type="button" class="act" {onclick}>{ label }</button>
+        </div>
     }
 }
 

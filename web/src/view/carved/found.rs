@@ -88,7 +88,7 @@ pub(super) fn Points(props: &FoundProps) -> Html {
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="Flight points as carved">
             <table class="sheet-table">
-                <caption>{ "What it does, and what shakes once per turn: the moment of unequal thrusts, the force of unequal masses" }</caption>
+                <caption>{ "What it does, and what shakes the shaft once per turn: moments across it by unequal thrusts and by blades out of track, forces by unequal drag and unequal masses" }</caption>
                 <thead><tr>
                     <th scope="col">{ "Flight point" }</th><th scope="col">{ "Blades" }</th>
                     <th scope="col">{ "Speed" }<small>{ units.symbol(Quantity::Speed) }</small></th>
@@ -96,8 +96,10 @@ pub(super) fn Points(props: &FoundProps) -> Html {
                     <th scope="col">{ "Thrust" }<small>{ units.symbol(Quantity::Force) }</small></th>
                     <th scope="col">{ "Efficiency" }</th>
                     <th scope="col">{ "Thrust by blade" }<small>{ units.symbol(Quantity::Force) }</small></th>
-                    <th scope="col">{ "Moment" }<small>{ units.symbol(Quantity::Torque) }</small></th>
-                    <th scope="col">{ "Force" }<small>{ units.symbol(Quantity::Force) }</small></th>
+                    <th scope="col">{ "Moment, thrust" }<small>{ units.symbol(Quantity::Torque) }</small></th>
+                    <th scope="col">{ "Moment, track" }<small>{ units.symbol(Quantity::Torque) }</small></th>
+                    <th scope="col">{ "Force, air" }<small>{ units.symbol(Quantity::Force) }</small></th>
+                    <th scope="col">{ "Force, masses" }<small>{ units.symbol(Quantity::Force) }</small></th>
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
             </table>
@@ -126,6 +128,8 @@ fn brief_row(
             <td>{ fixed_or_none(b.efficiency, 3) }</td>
             <td>{ point.map(each) }</td>
             <td>{ once.map(|o| of(Quantity::Torque, Some(o.moment_n_m))) }</td>
+            <td>{ once.map(|o| of(Quantity::Torque, o.track_moment_n_m)) }</td>
+            <td>{ once.map(|o| of(Quantity::Force, Some(o.air_force_n))) }</td>
             <td>{ once.map(|o| of(Quantity::Force, Some(o.mass_force_n))) }</td>
         </tr>
     }

@@ -8,14 +8,15 @@ mod take_off;
 use std::rc::Rc;
 
 use spokeshave::job::AngleReference;
+use spokeshave::result::Doubt;
 use yew::prelude::*;
 
 use super::form::Pick;
 use super::{Act, Seen, use_act};
-use crate::number::{fixed, with_unit};
+use crate::app::RigRef;
+use crate::number::fixed;
 use crate::results::CarvedFound;
 use crate::state::{Action, CarvedChoice, Choice, Running, State};
-use crate::units::Quantity;
 use entry::BladeEntry;
 use found::{Balance, Differences, Points};
 use sheet::ReadingsSheet;
@@ -28,6 +29,8 @@ pub struct CarvedPanelProps {
     pub state: Seen,
     /// What the readings say; may be a frame old, not there before it is worked out.
     pub found: Option<Rc<Result<CarvedFound, String>>>,
+    /// The job made ready; may be a frame old.
+    pub rig: Option<RigRef>,
 }
 
 /// Whether the panel shows the same of two states.
@@ -52,11 +55,17 @@ pub fn in_a_line(state: &State, found: Option<&Result<CarvedFound, String>>) -> 
     let Some(Ok(found)) = found else { return count };
     let stations = found.carved.blades.iter().flat_map(|b| &b.stations);
     let worst = stations.map(|s| s.angle_deg.from_drawn.abs()).fold(0.0, f64::max);
-    format!(
-        "{count}; up to {}° from the drawing; {} heavy at the tip",
-        fixed(worst, 1),
-        with_unit(state.units, Quantity::Mass, Some(1e-3 * found.carved.balance.grams_at_tip))
-    )
+    let b = &found.carved.balance;
+    let balance = match b.heavy_blade {
+        Some(blade) if b.grams_at_tip >= 0.005 => {
+            format!("blade {blade} sinks, as by {}\u{a0}g at the tip", fixed(b.grams_at_tip, 2))
+        }
+        _ => "the blades balance".into(),
+    };
+    let left_out = found.carved.doubts.iter().filter(|d| !d.counted).count();
+    let doubted =
+        if left_out > 0 { format!("; hard to believe and left out: {left_out}") } else { String::new() };
+    format!("{count}; up to {}° from the drawing; {balance}{doubted}", fixed(worst, 1))
 }
 
 /// What a choice about the blades does.
@@ -72,8 +81,11 @@ pub fn CarvedPanel(props: &CarvedPanelProps) -> Html {
     let job = state.job();
     let reference = job.carved.as_ref().map_or(AngleReference::FlatFace, |c| c.angle_reference);
     let pick = choose(&act, |i: usize| CarvedChoice::Reference(REFERENCES[i.min(1)]));
-    let blades = (0..job.propeller.blades as usize)
-        .map(|blade| html! { <BladeEntry key={blade} {blade} state={state.clone()} /> });
+    let doubts = props.rig.as_ref().map_or_else(Vec::new, |rig| spokeshave::carved::doubts(&rig.0));
+    let blades = (0..job.propeller.blades as usize).map(|blade| {
+        let doubts: Vec<Doubt> = doubts.iter().filter(|d| d.blade == blade + 1).cloned().collect();
+        html! { <BladeEntry key={blade} {blade} {doubts} state={state.clone()} /> }
+    });
     html! {
         <div class="carved">
             <p class="note">
@@ -102,16 +114,9 @@ fn results(props: &CarvedPanelProps) -> Html {
         Some(Err(why)) => return html! { <p class="note">{ format!("Nothing yet: {why}.") }</p> },
         Some(Ok(found)) => Rc::new(found.clone()),
     };
-    let doubts = found.carved.doubts.iter().map(|d| {
-        let place = with_unit(props.state.units, Quantity::Length, Some(d.radius_m));
-        html! { <li>{ format!("Blade {}, {place}: {}.", d.blade, d.message) }</li> }
-    });
     let units = props.state.units;
     html! {
         <>
-            if !found.carved.doubts.is_empty() {
-                <div class="doubts" role="status"><b>{ "Hard to believe" }</b><ul>{ for doubts }</ul></div>
-            }
             <Differences found={found.clone()} {units} />
             <Points found={found.clone()} {units} />
             <Balance found={found.clone()} {units} />

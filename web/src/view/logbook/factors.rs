@@ -27,7 +27,7 @@ pub(super) fn FactorBars(props: &FactorBarsProps) -> Html {
         <div class="scroll" tabindex="0" role="region" aria-label="Factors found">
             <table class="sheet-table factors">
                 <thead><tr>
-                    <th scope="col">{ "Factor on the job’s figure" }</th><th scope="col">{ "Found" }</th><th scope="col">{ "±" }</th>
+                    <th scope="col">{ "The job’s figure times" }</th><th scope="col">{ "Found" }</th><th scope="col">{ "±" }</th>
                     <th scope="col">{ "± before" }</th><th scope="col">{ "Thin: before, thick: with the readings" }</th><th scope="col">{ "" }</th>
                 </tr></thead>
                 <tbody>{ for found.iter().map(|f| row(f, most)) }</tbody>
@@ -46,7 +46,7 @@ fn row(f: &FactorFound, most: f64) -> Html {
     let name = match f.name {
         "engine_power" => "Engine power",
         "drag_area" => "Drag area, without lift",
-        "propeller_power" => "Power the propeller takes",
+        "propeller_power" => "Power to turn the propeller",
         _ => "Fuel or current for a power",
     };
     let middle = x(1.0).to_string();

@@ -5,11 +5,13 @@ use std::rc::Rc;
 use spokeshave::result::{Brief, LogLine, Logged};
 use yew::prelude::*;
 
+use crate::chart::line::{Axis, LineChart, Series, Stroke};
+use crate::chart::unit::Unit;
 use crate::number::{figure, fixed_or_none, signed_or_none};
 use crate::units::{Quantity, Units};
 
 /// Properties of the tables.
-#[derive(Properties, PartialEq)]
+#[derive(Clone, Properties, PartialEq)]
 pub(super) struct LinesProps {
     pub(super) logged: Rc<Logged>,
     pub(super) units: Units,
@@ -20,6 +22,8 @@ pub(super) struct LinesProps {
 pub(super) fn Lines(props: &LinesProps) -> Html {
     let rows = props.logged.readings.iter().enumerate().map(|(i, line)| row(i, line, props.units));
     html! {
+        <>
+        <Residuals ..props.clone() />
         <div class="scroll" tabindex="0" role="region" aria-label="Readings against what is expected">
             <table class="sheet-table">
                 <caption>{ "Readings against what is expected without and with the factors" }</caption>
@@ -31,15 +35,48 @@ pub(super) fn Lines(props: &LinesProps) -> Html {
                 <tbody>{ for rows }</tbody>
             </table>
         </div>
+        </>
     }
 }
 
+/// Rpm read less expected, reading by reading.
+#[component]
+fn Residuals(props: &LinesProps) -> Html {
+    let all = &props.logged.readings;
+    let series = |name: &'static str, stroke, of: fn(&LogLine) -> Option<f64>| Series {
+        name: name.into(),
+        points: all
+            .iter()
+            .enumerate()
+            .map(|(i, l)| [i as f64 + 1.0, less(l, of(l)).unwrap_or(f64::NAN)])
+            .collect(),
+        stroke,
+    };
+    let series = vec![
+        series("without the factors", Stroke::Dashed, |l| l.before_rpm),
+        series("with them", Stroke::Solid, |l| l.after_rpm),
+    ];
+    let known = series.iter().flat_map(|s| &s.points).filter(|p| p[1].is_finite()).count();
+    if known < 4 {
+        return html! {};
+    }
+    let number = |name| Unit { name, per_si: 1.0, decimals: 0 };
+    let span = Some((1.0, all.len() as f64));
+    let x = Axis { words: "reading".into(), unit: number(""), span };
+    let y = Axis { words: "rpm read less expected".into(), unit: number("rpm"), span: None };
+    html! { <LineChart title="Engine rpm read less rpm expected" {x} {y} {series} height={200.0} /> }
+}
+
+fn less(l: &LogLine, expected: Option<f64>) -> Option<f64> {
+    Some(l.engine_rpm? - expected?)
+}
+
 fn row(i: usize, l: &LogLine, units: Units) -> Html {
-    let less = |expected: Option<f64>| signed_or_none(expected.map(|e| l.engine_rpm - e), 0);
+    let less = |expected: Option<f64>| signed_or_none(less(l, expected), 0);
     html! {
         <tr class={classes!(l.outlier.then_some("outlier"))}>
             <th scope="row">{ i + 1 }</th>
-            <td>{ figure(units, Quantity::Rpm, Some(l.engine_rpm)) }</td>
+            <td>{ figure(units, Quantity::Rpm, l.engine_rpm) }</td>
             <td>{ less(l.before_rpm) }</td>
             <td>{ less(l.after_rpm) }</td>
             <td>{ fixed_or_none(l.consumption, 2) }</td>

@@ -51,7 +51,7 @@ pub fn in_a_line(state: &State) -> String {
     };
     match (logbook.in_use, logbook.factors) {
         (true, Some(f)) => format!(
-            "{count}; every figure of the page uses engine power × {}, drag area × {}, propeller power × {}",
+            "{count}; every figure of the page uses engine power × {}, drag area × {}, power to turn the propeller × {}",
             fixed(f.engine_power, 3),
             fixed(f.drag_area, 3),
             fixed(f.propeller_power, 3)

@@ -43,7 +43,7 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
     html! {
         <>
             <p class="note">
-                { "One row for each steady reading. Ground runs go with airspeed 0; full throttle is 100. Tick level for flight that neither climbs nor sinks. \
+                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is 100. Tick level for flight that neither climbs nor sinks. \
                    Pressure altitude and true airspeed, please; leave empty what was not read." }
             </p>
             if count > 0 {

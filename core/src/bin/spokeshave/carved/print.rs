@@ -70,7 +70,9 @@ fn csv_row(blade: &CarvedBlade, s: &CarvedStation, p: Option<&PlannedStation>) -
 pub(super) fn text(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
     let mut parts = vec![format!("{}: as carved", carved.title)];
     parts.extend(carved.doubts.iter().map(|d| {
-        format!("Hard to believe: blade {}, {} mm: {}", d.blade, figure(Some(1e3 * d.radius_m), 1), d.message)
+        let counts = if d.counted { "counted, as confirmed" } else { "left out" };
+        let place = figure(Some(1e3 * d.radius_m), 1);
+        format!("Hard to believe, {counts}: blade {}, {place} mm: {}", d.blade, d.message)
     }));
     parts.extend(carved.blades.iter().map(blade));
     parts.push(points(carved, plan));
@@ -123,7 +125,7 @@ fn points(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
 }
 
 fn shaking(carved: &Carved) -> String {
-    let header = ["once per turn", "thrust by blade N", "moment N m", "air N", "masses N"];
+    let header = ["once per turn", "thrust by blade N", "thrust N m", "track N m", "air N", "masses N"];
     let row = |p: &CarvedPoint| {
         let thrusts: Vec<String> = p.blades.iter().map(|b| figure(Some(b.thrust_n), 1)).collect();
         let once = p.once_per_turn;
@@ -131,6 +133,7 @@ fn shaking(carved: &Carved) -> String {
             p.drawn.name.clone(),
             thrusts.join(" "),
             figure(once.map(|o| o.moment_n_m), 2),
+            figure(once.and_then(|o| o.track_moment_n_m), 2),
             figure(once.map(|o| o.air_force_n), 2),
             figure(once.map(|o| o.mass_force_n), 1),
         ]

@@ -22,7 +22,7 @@ pub(super) const CSV_HEADER: [&str; 9] = [
 pub(super) fn csv_rows(logged: &Logged) -> Vec<Vec<String>> {
     let row = |l: &LogLine| {
         let figures = [
-            Some(l.engine_rpm),
+            l.engine_rpm,
             l.before_rpm,
             l.after_rpm,
             l.consumption,
@@ -71,7 +71,7 @@ fn readings(logged: &Logged) -> String {
     let row = |(i, l): (usize, &LogLine)| {
         vec![
             (i + 1).to_string(),
-            figure(Some(l.engine_rpm), 0),
+            figure(l.engine_rpm, 0),
             figure(l.before_rpm, 0),
             figure(l.after_rpm, 0),
             figure(l.consumption, 2),
