@@ -23,9 +23,9 @@ for page in pdf:
     assert not outside, (page.number, outside)
     for i, a in enumerate(words):
         for b in words[i + 1 :]:
-            shared = pymupdf.Rect(a[:4]) & pymupdf.Rect(b[:4])
+            wide, tall = min(a[2], b[2]) - max(a[0], b[0]), min(a[3], b[3]) - max(a[1], b[1])
             # Boxes of words are as high as the font's tallest letters; what counts is that they are beside or under one another.
-            assert shared.is_empty or shared.width < 0.5 or shared.height < 3.5, (page.number, a, b)
+            assert wide < 0.5 or tall < 3.5, (page.number, a, b)
     said = page.get_text()
     assert f"page {page.number + 1} of {len(pdf)}" in said and "Before you act" in said
     text += said
