@@ -15,7 +15,7 @@ mod near;
 
 pub use near::Near;
 
-use std::f64::consts::{FRAC_PI_2, PI};
+use std::f64::consts::{FRAC_PI_2, FRAC_PI_4, PI};
 
 use roots::{SimpleConvergency, find_root_brent};
 
@@ -124,12 +124,12 @@ const NEAR_ZERO_RAD: f64 = 1e-7;
 const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
-/// The most that lift and drag coefficients and their rises with the angle of attack (1/rad) add up to: what the steepest
-/// stall of the tables, 0.3 in half a degree, comes to with all the rest.
-const STEEPEST_SECTION: f64 = 45.0;
-/// The most that the rest of the residual rises or falls with φ, 1/rad: `sqrt(5.0² + 6.1²)` for the momentum terms of N and M with
-/// Prandtl's factor, whose own part is largest where `f = 0.8`.
-const STEEPEST_MOMENTUM: f64 = 7.9;
+/// The most that the rises of lift and drag coefficients with the angle of attack add up to in the shipped tables where they
+/// hold, at the steepest stall, with the coefficients themselves, 1/rad.
+const STEEPEST_SECTION: f64 = 65.0;
+/// The most that the momentum terms of N (times sin 2φ) and of M rise or fall with φ, 1/rad: `4 F` and `4 F cos 2φ`, and what Prandtl's
+/// factor adds where it changes fastest, at `f = 0.8` of both ends.
+const STEEPEST_MOMENTUM: (f64, f64) = (5.1, 6.1);
 /// Up to this share of the stall angle lift rises steeply.
 const STEEP: f64 = 0.75;
 /// Of the inflow angle (rad) and of the residual over `hypot(V, Ω r)`.
@@ -278,8 +278,7 @@ impl Element<'_> {
         reach: f64,
         residual: &impl Fn(f64) -> f64,
     ) -> Option<f64> {
-        let steepest = STEEPEST_MOMENTUM + self.solidity * STEEPEST_SECTION;
-        let onward = |(phi, value): (f64, f64)| stepped(phi, end, value.abs() / steepest);
+        let onward = |(phi, value): (f64, f64)| stepped(phi, end, value.abs() / self.steepest(phi, end));
         let mut here = start;
         let mut next = if window == start.0 { onward(start) } else { window };
         while here.0 != end && (self.angle_rad - here.0).abs() < reach {
@@ -300,6 +299,15 @@ impl Element<'_> {
             next = onward(here);
         }
         None
+    }
+
+    /// The most that the residual over `hypot(V, Ω r)` rises or falls with φ between two inflow angles, 1/rad.
+    fn steepest(&self, a: f64, b: f64) -> f64 {
+        let flow = self.flow();
+        let most = a.abs().max(b.abs());
+        let sin_2phi = if most < FRAC_PI_4 { (2.0 * most).sin() } else { 1.0 };
+        let (n, m) = STEEPEST_MOMENTUM;
+        flow.turning * n * sin_2phi + flow.axial.abs() * m + self.solidity * STEEPEST_SECTION
     }
 
     fn balanced(&self, phi: f64, lookups: u32) -> Balance {

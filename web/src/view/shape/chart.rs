@@ -130,6 +130,9 @@ fn axes(at: &Place, units: Units) -> Html {
     }
 }
 
+/// Width of a letter of the words in the chart, px.
+const LETTER: f64 = 7.0;
+
 fn painted(at: &Place, layers: &Layers) -> Html {
     let [x, y, w, h] = at.pane().map(px);
     let lines = layers.lines.iter().map(|line| html! { <path class="contour" d={line.data.clone()} /> });
@@ -137,9 +140,12 @@ fn painted(at: &Place, layers: &Layers) -> Html {
         html! { <><path class="broken" d={edge.data.clone()} /><path class="edge" d={edge.data.clone()} /></> }
     });
     let words = layers.lines.iter().chain(&layers.edges).filter_map(|line| {
-        let at = line.at?;
+        let spot = line.at?;
         let class = if line.limit { "haloed strong" } else { "haloed" };
-        Some(html! { <text {class} x={px(at[0])} y={px(at[1] + 4.0)} text-anchor="middle">{ &line.words }</text> })
+        // Long words of an edge near the rim stay inside.
+        let half = 0.5 * LETTER * line.words.chars().count() as f64;
+        let x = spot[0].min(at.right - half).max(at.left + half);
+        Some(html! { <text {class} x={px(x)} y={px(spot[1] + 4.0)} text-anchor="middle">{ &line.words }</text> })
     });
     html! {
         <g aria-hidden="true">

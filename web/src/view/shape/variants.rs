@@ -123,12 +123,12 @@ fn BladeRow(props: &BladeRowProps) -> Html {
                 Some(row) => figures(row, &props.aims, Some(&props.drawn), props.units),
                 None => html! { <td colspan={(props.aims.len() + 2).to_string()}>{ "not allowed in the job as it stands now" }</td> },
             } }
-            <td class="row-acts">
+            <td><div class="row-acts">
                 <button type="button" class="act" aria-pressed={if compared { "true" } else { "false" }} aria-label={format!("Compare {name}")}
                     onclick={send(Beside::Compare((!compared).then_some(i)))}>{ "Compare" }</button>
                 <button type="button" class="act" aria-label={format!("Use {name}")} onclick={send(Beside::Use(i))}>{ "Use this blade" }</button>
                 <button type="button" class="act" aria-label={format!("Remove {name}")} onclick={send(Beside::Drop(i))}>{ "Remove" }</button>
-            </td>
+            </div></td>
         </tr>
     }
 }
