@@ -1,11 +1,13 @@
-//! What an analysis and a departure map take in the page, beside the same work natively. The figures of the README.
+//! What an analysis, a departure map, the speed range and a search take in the page, beside the same work natively. The figures of the README.
 
 use std::time::Instant;
 
 use anyhow::{Context, Result, ensure};
 use spokeshave_tests::browser::Browser;
 
-const ROUNDS: u32 = 30;
+/// What is timed, how often at once, and the rounds of which the least counts.
+const WORK: [(&str, u32, u32); 4] =
+    [("analysis", 1000, 30), ("map", 20, 30), ("range", 5, 30), ("search", 1, 3)];
 
 /// The least time of one piece of work in the page, ms: many at once less the getting ready, each the least of many rounds.
 const IN_PAGE: &str = r"
@@ -32,13 +34,13 @@ async fn main() -> Result<()> {
 
 async fn measure(browser: &Browser) -> Result<()> {
     browser.open_page().await?;
-    for (what, times) in [("analysis", 1000), ("map", 20)] {
+    for (what, times, rounds) in WORK {
         let script = IN_PAGE
-            .replace("ROUNDS", &ROUNDS.to_string())
+            .replace("ROUNDS", &rounds.to_string())
             .replace("WHAT", &format!("'{what}'"))
             .replace("TIMES", &times.to_string());
         let page_ms = browser.run(&script).await?.as_f64().context("no time")?;
-        let native_ms = native_ms(what, times)?;
+        let native_ms = native_ms(what, times, rounds)?;
         let ratio = page_ms / native_ms;
         println!("{what}: {page_ms:.4} ms in the page, {native_ms:.4} ms natively, ratio {ratio:.2}");
     }
@@ -46,10 +48,10 @@ async fn measure(browser: &Browser) -> Result<()> {
 }
 
 /// The same natively.
-fn native_ms(what: &str, times: u32) -> Result<f64> {
+fn native_ms(what: &str, times: u32, rounds: u32) -> Result<f64> {
     let least = |times: u32| -> Result<f64> {
         let mut least = f64::INFINITY;
-        for _ in 0..ROUNDS {
+        for _ in 0..rounds {
             let begun = Instant::now();
             ensure!(spokeshave_web::timing::work(what, times) == times, "not done");
             least = least.min(begun.elapsed().as_secs_f64() * 1000.0);
