@@ -216,6 +216,38 @@ fn a_blade_left_full_is_brought_to_the_drawing() {
     }
 }
 
+/// A blade too coarse with no chord to spare: turning it down planes the thin trailing edge away. With one blade's own angle `a(t)` and lost share of chord `s(t)` after
+/// a turn t, the plan's turn has the least `(a − wanted)² + (0.123 s)²`, so that neither less nor more of it is better.
+#[test]
+fn chord_that_would_be_lost_is_weighed_against_the_angle() {
+    let mut rig = carved_by(|_, _| [0.8, 0.0, 1.5]);
+    rig.job.carved.as_mut().unwrap().least_chord_share = 0.6;
+    let plan = carved::plan(&rig, 1).unwrap();
+    let mut weighed = 0;
+    for s in plan.blades[0].stations.iter().filter(|s| s.radius_m > 0.3 && s.face_trailing_m > 0.0) {
+        let cut = rig.rotor.blade.cut(s.radius_m);
+        let outline = spokeshave::section::library().outline("clark-y", cut.thickness_ratio).unwrap();
+        let profile = carved::Profile::new(&outline).unwrap();
+        let slab = carved::Slab {
+            face_rad: 0.0,
+            chord_m: cut.chord_m,
+            thickness_m: cut.thickness_ratio * cut.chord_m + 1.5e-3,
+        };
+        let lost = |turn: f64| {
+            1.0 - profile.cut(slab, &carved::Cuts::turning(slab.chord_m, turn)).chord_m / cut.chord_m
+        };
+        let turn = -(s.face_trailing_m / slab.chord_m).atan();
+        let left = s.angle_deg - s.wanted_deg;
+        assert!(left > 0.0 && left < 0.8, "part of the way: {s:?}");
+        // Turning further takes an angle off what is left and chord besides.
+        let cost = |more: f64| (left.to_radians() + more).powi(2) + (0.7 / 5.7 * lost(turn + more)).powi(2);
+        let step = 5e-4;
+        assert!(cost(0.0) <= cost(step) + 1e-7 && cost(0.0) <= cost(-step) + 1e-7, "{s:?}");
+        weighed += 1;
+    }
+    assert!(weighed > 3, "{weighed}");
+}
+
 #[test]
 fn what_cannot_be_reached_evens_the_blades() {
     // Thin blades may not be planed: the limit holds, the blade that stands too flat stays so, the other comes to meet it only as far as the limit.

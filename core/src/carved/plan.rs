@@ -3,7 +3,8 @@
 //! At each radius the wanted angle is the one that gives the drawn blade's departure with the chord and thickness the
 //! plan leaves, in the balance of that element at the flight point's condition as drawn. Within what planing can reach
 //! ([`super::plane`]) each blade takes the angle of least squares both from the wanted one and from the mean of the
-//! blades; chord and thickness likewise, from the drawn ones. Small differences that no plane would set right are left.
+//! blades; chord and thickness likewise, from the drawn ones. Planing at a thin trailing edge costs chord: where less than the drawn chord would
+//! be left, the turn stops where the angle that is still wrong weighs as much as the chord that is lost. Small differences that no plane would set right are left.
 
 use super::CarvedError;
 use super::even::evened;
@@ -24,6 +25,11 @@ const HALVINGS: u32 = 40;
 /// What is not worth a cut: angle, rad; depth off back or edge, m.
 const LEAST_TURN_RAD: f64 = 0.02 * std::f64::consts::PI / 180.0;
 const LEAST_CUT_M: f64 = 0.1e-3;
+/// What a lost share of chord weighs as an angle, rad: load goes with chord as `Δc/c` and with angle as `a Δα/cl`, for a lift slope of 5.7 a radian and
+/// a lift coefficient of 0.7.
+const CHORD_WEIGHT_RAD: f64 = 0.7 / 5.7;
+/// Steps in which the turn is weighed, each leaving two thirds.
+const THIRDS: u32 = 40;
 /// Least Prandtl factor at which the wanted angle is solved; nearer to the ends it is the drawn one.
 const LEAST_FACTOR: f64 = 0.35;
 
@@ -162,7 +168,8 @@ impl<'r> Bench<'r> {
             goals = evened(drawn_chord, &chords).into_iter().zip(evened(drawn_thickness, &thick)).collect();
             let reach: Vec<(f64, f64)> = pieces.iter().zip(&goals).map(|(p, g)| p.reach(*g)).collect();
             let angles = evened(wanted_rad, &reach);
-            turns = pieces.iter().zip(&angles).zip(&goals).map(|((p, a), g)| p.turn_to(*a, *g)).collect();
+            let weighed = |((p, a), g): ((&Piece, &f64), &(f64, f64))| p.weighed(*a, *g, drawn_chord);
+            turns = pieces.iter().zip(&angles).zip(&goals).map(weighed).collect();
         }
         pieces
             .iter()
@@ -265,6 +272,26 @@ impl Piece<'_> {
             if self.angle(middle, goal) < angle_rad { low = middle } else { high = middle }
         }
         0.5 * (low + high)
+    }
+
+    /// The turn towards an angle (rad) at which what is left of its error and what is lost of the drawn chord weigh least.
+    fn weighed(&self, angle_rad: f64, goal: (f64, f64), drawn_chord_m: f64) -> f64 {
+        let turn = self.turn_to(angle_rad, goal);
+        let whole = drawn_chord_m.min(self.slab.chord_m);
+        let lost = |turn: f64| (whole - self.turned(turn).chord_m).max(0.0) / drawn_chord_m;
+        if lost(turn) == 0.0 {
+            return turn;
+        }
+        let cost = |share: f64| {
+            let here = share * turn;
+            (self.angle(here, goal) - angle_rad).powi(2) + (CHORD_WEIGHT_RAD * lost(here)).powi(2)
+        };
+        let (mut low, mut high) = (0.0, 1.0);
+        for _ in 0..THIRDS {
+            let third = (high - low) / 3.0;
+            if cost(low + third) < cost(high - third) { high -= third } else { low += third }
+        }
+        0.5 * (low + high) * turn
     }
 
     fn told(&self, turn_rad: f64, goal: (f64, f64), wanted_rad: f64) -> PlannedStation {
