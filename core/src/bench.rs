@@ -9,11 +9,13 @@
 
 mod blank;
 pub(crate) mod draw;
+mod drilling;
 mod error;
 mod file;
 mod form;
 mod loft;
 pub(crate) mod page;
+mod pierce;
 mod ring;
 mod shape;
 pub(crate) mod sheet;
@@ -25,11 +27,12 @@ mod write;
 
 pub use blank::{Blank, Heights, Layers, Plank};
 pub use draw::{Anchor, Drawing, Item, Layer, Stroke, Text};
+pub use drilling::{Hole, Pattern};
 pub use error::{BenchError, Fault};
 pub use file::{File, files, sheet_files};
 pub use form::{Form, SIDE_POINTS};
 pub use loft::{Boss, loft, root_radius_m};
-pub use page::{CAUTIONS, Leaf, Paper, Sheet, View, bind, lay};
+pub use page::{Leaf, Paper, Sheet, View, bind, lay};
 pub use ring::Ring;
 pub use sheet::{Card, Side, leaves, machine_drawings, stack_drawing, template_card};
 pub use solid::Solid;

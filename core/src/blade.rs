@@ -5,12 +5,16 @@
 //! Blade angles are kept to the chord line: an angle measured on the flat face is turned by the section's own angle
 //! between face and chord line at that thickness.
 
+mod line;
+
 use std::f64::consts::{PI, TAU};
 use std::sync::Arc;
 
 use crate::curve::Curve;
 use crate::job::{AngleReference, Job, Propeller, Station};
 use crate::section::{Family, TableError, library};
+
+pub use line::StackingLine;
 
 /// What the blade is at one radius.
 #[derive(Clone, Copy, Debug, PartialEq)]

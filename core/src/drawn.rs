@@ -31,7 +31,7 @@ pub struct DrawnStation {
 /// use spokeshave::{drawn::stations, job::{DEMOS, Job}, rig::Rig};
 /// let job = Job::from_json(DEMOS[0].json).unwrap();
 /// let drawn = stations(&Rig::new(&job).unwrap().rotor.blade, job.propeller.angle_reference);
-/// assert!((drawn[0].angle_deg - 56.4).abs() < 1e-9);
+/// assert!((drawn[0].angle_deg - 55.4).abs() < 1e-9);
 /// ```
 #[must_use]
 pub fn stations(blade: &Blade, reference: AngleReference) -> Vec<DrawnStation> {

@@ -10,6 +10,7 @@ pub mod aircraft;
 pub mod bench;
 pub mod blade;
 pub mod carved;
+mod caution;
 pub mod change;
 pub mod curve;
 pub mod dossier;
@@ -26,3 +27,5 @@ pub mod section;
 pub mod shape;
 pub mod sheet;
 pub mod wood;
+
+pub use caution::CAUTIONS;

@@ -1,14 +1,13 @@
 //! Will the blade hold: material, real sections, loads, stress, vibration, weight.
 //!
-//! The blade is a slender beam clamped at the hub, its sections threaded at their centroids on a straight line that may lean
-//! forward by a rake. [`beam`] is plain mathematics on arrays; [`section`] measures the outline; the rest puts a job's blade through both.
+//! The blade is a slender beam clamped at the hub, its sections threaded at their centroids on the stacking line or beside it, and
+//! leaning by a rake. [`beam`] is plain mathematics on arrays; [`section`] measures the outline; the rest puts a job's blade through both.
 
 mod assumptions;
 pub mod beam;
 mod bent;
 mod blade;
 mod cases;
-mod cautions;
 mod hub;
 mod judged;
 mod loads;
@@ -20,13 +19,13 @@ mod places;
 mod remedy;
 pub mod section;
 mod species;
+mod stands;
 mod strength;
 mod stress;
 mod twist;
 mod vibration;
 
 pub use blade::{BladeBeam, WoodError};
-pub use cautions::CAUTIONS;
 pub use margin::{least_margin, least_margin_like};
 pub use mass::mass;
 pub use material::{Material, Strength, material};

@@ -2,13 +2,13 @@
 
 mod paper;
 
-use std::collections::HashMap;
+use std::collections::{HashMap, HashSet};
 
 use paper::words_apart;
 use spokeshave::bench::{
     Bench, BenchError, Fault, Paper, Side, Solid, Unit, files, sheet_files, template_card,
 };
-use spokeshave::job::{DEMOS, Hub, Job, Making, PitchControl, Rotation, Wood};
+use spokeshave::job::{DEMOS, Flange, Hub, Job, Making, PitchControl, Rotation, Wood};
 use spokeshave::rig::Rig;
 
 fn demo(index: usize) -> Job {
@@ -30,6 +30,26 @@ fn open_edges(solid: &Solid) -> usize {
     edges.values().filter(|count| **count != 0).count()
 }
 
+/// Corners less edges plus faces: 2 for a body without a hole through it, 2 less for every hole.
+fn euler(solid: &Solid) -> i32 {
+    let edges: HashSet<(u32, u32)> = solid
+        .triangles
+        .iter()
+        .flat_map(|[a, b, c]| [(*a, *b), (*b, *c), (*c, *a)])
+        .map(|(a, b)| (a.min(b), a.max(b)))
+        .collect();
+    let [corners, edges, faces] =
+        [solid.vertices.len(), edges.len(), solid.triangles.len()].map(|n| i32::try_from(n).unwrap());
+    corners - edges + faces
+}
+
+/// Wood that a job's drilling takes out of a boss, m³: round holes.
+fn drilled_m3(job: &Job) -> f64 {
+    let Some(hub) = job.wood.as_ref().and_then(|w| w.hub.as_ref()) else { return 0.0 };
+    let disc = |d: f64| std::f64::consts::FRAC_PI_4 * d * d;
+    hub.thickness_m * (disc(hub.bore_m) + f64::from(hub.bolts) * disc(hub.bolt_diameter_m))
+}
+
 /// Volume by the trapezoid rule over the areas of the rings, m³: one blade, from the axis or the hub.
 fn ring_volume_m3(bench: &Bench) -> f64 {
     let tip = (bench.form.blade.radius_m, 0.0);
@@ -49,7 +69,8 @@ fn every_demo_is_a_closed_solid_of_the_volume_of_its_sections() {
             let solid = bench.solid();
             assert_eq!(open_edges(&solid), 0, "{}", demo_job.name);
             let pieces = if one_piece { f64::from(job.propeller.blades) } else { 1.0 };
-            let (found, sections) = (solid.volume_m3(), pieces * ring_volume_m3(&bench));
+            let drilled_m3 = if one_piece { drilled_m3(&job) } else { 0.0 };
+            let (found, sections) = (solid.volume_m3(), pieces * ring_volume_m3(&bench) - drilled_m3);
             // Bending the plan into a blade's share of the turn changes the hub of other than two blades.
             let allowed = if one_piece && job.propeller.blades != 2 { 0.15 } else { 0.005 };
             assert!((found / sections - 1.0).abs() < allowed, "{}: {found} {sections}", demo_job.name);
@@ -58,13 +79,42 @@ fn every_demo_is_a_closed_solid_of_the_volume_of_its_sections() {
 }
 
 #[test]
-fn propellers_of_one_to_six_blades_are_closed() {
+fn propellers_of_one_to_six_blades_are_closed_and_drilled() {
     for blades in 1..=6 {
         let mut job = demo(0);
         job.propeller.blades = blades;
-        let solid = bench(&job).unwrap().solid();
-        assert_eq!(open_edges(&solid), 0, "{blades} blades");
-        assert!(solid.volume_m3() > 0.0);
+        let drilled = bench(&job).unwrap().solid();
+        assert_eq!(open_edges(&drilled), 0, "{blades} blades");
+        // A bore and six bolts.
+        assert_eq!(euler(&drilled), 2 - 2 * 7, "{blades} blades");
+        // The same boss, without a hub that tells of holes.
+        job.wood = None;
+        job.bench = Some(Making { blank_thickness_m: Some(0.09), ..Making::default() });
+        let whole = bench(&job).unwrap().solid();
+        assert_eq!((open_edges(&whole), euler(&whole)), (0, 2), "{blades} blades");
+        let (out, closed) = (whole.volume_m3() - drilled.volume_m3(), drilled_m3(&demo(0)));
+        // A polygon of 48 sides in a circle has 0.29 % less.
+        assert!((out / closed - 0.9971).abs() < 2e-4, "{blades} blades: {out} {closed}");
+    }
+}
+
+#[test]
+fn every_pattern_that_the_boss_can_hold_is_drilled() {
+    for (flange, bolts) in [(Some(Flange::Sae1), 6), (Some(Flange::Sae2), 6), (None, 1), (None, 2), (None, 9)]
+    {
+        for (rotation, wide) in
+            [(Rotation::ClockwiseFromBehind, 0.06), (Rotation::AnticlockwiseFromBehind, 0.16)]
+        {
+            let mut job = demo(0);
+            job.propeller.rotation = rotation;
+            job.bench = Some(Making { flange, ..Making::default() });
+            let hub = job.wood.as_mut().and_then(|w| w.hub.as_mut()).unwrap();
+            (hub.bolts, hub.bolt_circle_m, hub.flange_diameter_m) =
+                (u32::try_from(bolts).unwrap(), wide, 0.17);
+            let holes = if flange.is_some() { 6 } else { bolts + 1 };
+            let solid = bench(&job).unwrap().solid();
+            assert_eq!((open_edges(&solid), euler(&solid)), (0, 2 - 2 * holes), "{flange:?} {bolts} {wide}");
+        }
     }
 }
 
@@ -152,7 +202,10 @@ fn what_cannot_be_made_is_said_with_its_place_and_its_amount() {
         change(&mut job);
         bench(&job).err().map(|e| e.0).unwrap_or_default()
     };
-    let thin = with(|job| job.bench = Some(Making { blank_thickness_m: Some(0.06), ..Making::default() }));
+    let thin = with(|job| {
+        job.wood = None;
+        job.bench = Some(Making { blank_thickness_m: Some(0.06), ..Making::default() });
+    });
     assert!(
         matches!(thin[..], [Fault::ThickerThanBlank { by_mm, radius_mm, .. }] if (10.0..20.0).contains(&by_mm) && radius_mm > 0.0),
         "{thin:?}"
@@ -186,6 +239,29 @@ fn what_cannot_be_made_is_said_with_its_place_and_its_amount() {
             if (given_mm - 40.0).abs() < 1e-6 && (1.0..20.0).contains(&by_mm) && radius_mm <= 90.0),
         "{low_boss:?}"
     );
+    let wide_flange = with(|job| {
+        job.propeller.hub_diameter_m = 0.11;
+        job.bench = Some(Making { flange: Some(Flange::Sae1), ..Making::default() });
+    });
+    // 4 3/8 in and 3/8 in: the holes reach 60.325 mm; of a radius of 55 mm 2 % stay as a wall.
+    assert!(
+        wide_flange.iter().any(|f| matches!(f, Fault::DrilledPastBoss { reach_mm, by_mm, .. }
+            if (reach_mm - 60.325).abs() < 1e-6 && (by_mm - 6.425).abs() < 1e-6)),
+        "{wide_flange:?}"
+    );
+    // Two stations half a millimetre apart, the chord turned by half a turn between them: the surface turns through itself.
+    let wrung = with(|job| {
+        let mut next = job.propeller.stations[0].clone();
+        next.radius_fraction += 0.0006;
+        next.angle_deg = Some(-90.0);
+        job.propeller.stations[0].angle_deg = Some(90.0);
+        job.propeller.stations.insert(1, next);
+        job.wood = None;
+    });
+    assert!(
+        matches!(wrung[..], [Fault::CrossesItself { radius_mm, by_mm }] if (120.0..120.5).contains(&radius_mm) && by_mm > 0.1),
+        "{wrung:?}"
+    );
     let crowded = with(|job| {
         job.propeller.blades = 12;
         job.propeller.stations.iter_mut().for_each(|s| s.chord_m *= 2.0);
@@ -201,9 +277,15 @@ fn all_text_stays_on_its_sheet_and_apart() {
     let mut inches = demo(0);
     inches.bench = Some(Making { fan_step_deg: Some(1.5), ..Making::default() });
     let mut wide = demo(0);
+    wide.wood = None;
     wide.propeller.stations.iter_mut().for_each(|s| s.chord_m *= 3.0);
     wide.propeller.stations.iter_mut().for_each(|s| s.thickness_ratio /= 3.0);
-    for job in [demo(0), demo(1), demo(2), inches, wide] {
+    let blades = [3, 4].map(|blades| {
+        let mut job = demo(0);
+        job.propeller.blades = blades;
+        job
+    });
+    for job in [demo(0), demo(1), demo(2), inches, wide].into_iter().chain(blades) {
         let bench = bench(&job).unwrap();
         for (paper, unit) in [(Paper::A4, Unit::Millimetre), (Paper::Letter, Unit::Inch)] {
             bench.sheets(paper, unit).iter().for_each(words_apart);
@@ -214,6 +296,7 @@ fn all_text_stays_on_its_sheet_and_apart() {
 #[test]
 fn a_template_larger_than_the_page_is_laid_over_several() {
     let mut job = demo(0);
+    job.wood = None;
     job.propeller.diameter_m = 4.0;
     job.propeller.hub_diameter_m = 0.4;
     job.propeller.stations.iter_mut().for_each(|s| s.chord_m *= 3.2);

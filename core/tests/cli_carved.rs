@@ -8,11 +8,11 @@ use serde_json::Value;
 use spokeshave::job::Job;
 
 const SHEET: &str = "blade,radius_mm,face angle,chord_mm,thickness_mm
-1,300,32 15,94,20.0
-1,540,18 30,76.5,11.4
-1,720,15.2,44,6.0
-2,300,31.1,93.5,20.4
-2,540,19.2,76,11.2
+1,300,31 15,112,25.8
+1,540,17 30,89,14.8
+1,720,14.2,49.5,6.5
+2,300,30.1,111.5,26.1
+2,540,18.2,88.5,14.6
 ";
 
 fn carved(rest: &[&str], sheet: &str) -> std::process::Output {
@@ -24,9 +24,14 @@ fn readings_are_told_for_people_for_programs_as_a_sheet_and_as_a_job() {
     let people = carved(&[], SHEET);
     let text = out(&people);
     assert_eq!(people.status.code(), Some(0), "{}", err(&people));
-    for said in
-        ["Blade 2, 2 readings", "between readings", "planned", "take off, mm", "once per turn", "a usual one"]
-    {
+    for said in [
+        "Blade 2, 2 readings",
+        "between readings",
+        "planned",
+        "take off, mm",
+        "once per turn",
+        "at 694 kg/m³:",
+    ] {
         assert!(text.contains(said), "{said}: {text}");
     }
     assert!(!text.contains("NaN") && !text.contains("inf"));
@@ -36,7 +41,7 @@ fn readings_are_told_for_people_for_programs_as_a_sheet_and_as_a_job() {
     let csv = out(&carved(&["--csv"], SHEET));
     assert_eq!(csv.lines().count(), 1 + 2 * 11);
     let job = Job::from_json(&out(&carved(&["--job"], SHEET))).unwrap();
-    assert_eq!(job.carved.unwrap().blades[0].readings[1].angle_deg, Some(18.5));
+    assert_eq!(job.carved.unwrap().blades[0].readings[1].angle_deg, Some(17.5));
 }
 
 #[test]

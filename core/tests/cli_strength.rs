@@ -17,7 +17,9 @@ fn demo() -> Value {
 
 #[test]
 fn the_sheet_is_told_for_people_for_programs_and_as_csv() {
-    let people = bench(&demo(), &[]);
+    let mut unnamed = demo();
+    unnamed.as_object_mut().unwrap().remove("wood");
+    let people = bench(&unnamed, &[]);
     let text = out(&people);
     assert_eq!(people.status.code(), Some(0), "{}", err(&people));
     for part in [
@@ -30,6 +32,7 @@ fn the_sheet_is_told_for_people_for_programs_and_as_csv() {
         assert!(text.contains(part), "{part}: {text}");
     }
     assert!(!text.contains("NaN") && !text.contains("inf "));
+    assert!(out(&bench(&demo(), &[])).contains("greatest torque, N m"));
     let json: Value = serde_json::from_str(&out(&bench(&demo(), &["--json"]))).unwrap();
     assert!(json["governing"]["margin"].is_number() && json["mass"]["blade_kg"].as_f64().unwrap() > 0.1);
     let csv = out(&bench(&demo(), &["--csv"]));

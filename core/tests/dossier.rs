@@ -26,7 +26,7 @@ fn full() -> Job {
         bolt_torque_n_m: Some(25.0),
     };
     job.wood = Some(Wood { hub: Some(hub), ..Wood::default() });
-    let text = "blade,radius_mm,face angle,chord_mm,thickness_mm\n1,300,30.2,94,21.5\n1,540,19.5,77.5,11.8\n2,300,29.1,93.5,21.2\n2,720,15,44,5.8\n";
+    let text = "blade,radius_mm,face angle,chord_mm,thickness_mm\n1,300,30.2,112,27.5\n1,540,19.5,89.5,15.6\n2,300,29.1,111.5,27.2\n2,720,15,49.5,6.9\n";
     job.carved = Some(carved::import::read(text, &job.propeller, None).unwrap().0);
     let reading = |engine_rpm, airspeed_m_s, level: bool| LogReading {
         engine_rpm: Some(engine_rpm),

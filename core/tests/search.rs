@@ -91,6 +91,7 @@ fn limits_are_kept_and_cost_something() {
 fn a_stress_margin_is_kept_where_the_job_names_its_wood() {
     let mut job = demo(0).job;
     let limits = |least| Limits { stress_margin_least: Some(least), ..Limits::default() };
+    job.wood = None;
     let bare = Rig::new(&job).unwrap();
     let few = Wish { most_trials: 30, ..Wish::of(&bare) };
     let result = found(&bare, &Wish { limits: limits(99.0), ..few.clone() }).unwrap().result;

@@ -272,7 +272,7 @@ fn the_chart_holds_the_drawn_propeller_and_its_limits() {
     let rig = demo(0);
     let (pitch, diameter) = (rig.rotor.blade.pitch_075_m(0.0), rig.job.propeller.diameter_m);
     let limits =
-        Limits { diameter_most_m: Some(1.55), standing_rpm_least: Some(2900.0), ..Limits::default() };
+        Limits { diameter_most_m: Some(1.55), standing_rpm_least: Some(2750.0), ..Limits::default() };
     let (pitches, diameters) =
         ([0.9 * pitch, pitch, 1.1 * pitch], [0.95 * diameter, diameter, 1.1 * diameter]);
     for by in [PitchBy::Scale, PitchBy::Turn] {

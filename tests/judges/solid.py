@@ -1,6 +1,6 @@
-"""The STL by trimesh: closed, handed as asked, and of the volume of its sections.
+"""The STL by trimesh: closed, handed as asked, drilled as asked, and of the volume of its sections.
 
-solid.py FOLDER BLADES right|left
+solid.py FOLDER BLADES right|left HOLES DRILLED_MM3
 """
 
 import csv
@@ -13,11 +13,14 @@ import trimesh
 from shapely.geometry import Polygon
 
 folder, blades, hand = Path(sys.argv[1]), int(sys.argv[2]), sys.argv[3]
+holes, drilled = int(sys.argv[4]), float(sys.argv[5])
 whole = folder / "propeller.stl"
 mesh = trimesh.load_mesh(whole if whole.exists() else folder / "blade.stl")
 assert mesh.is_watertight, "not watertight"
 assert mesh.is_winding_consistent, "triangles turn both ways"
 assert mesh.is_volume and mesh.volume > 0, f"inside out: {mesh.volume}"
+# A closed body without a hole through it has Euler's number 2, 2 less for every hole.
+assert mesh.euler_number == 2 - 2 * holes, f"Euler's number {mesh.euler_number} for {holes} holes"
 
 rings = defaultdict(list)
 with open(folder / "surface.csv", newline="") as file:
@@ -29,9 +32,9 @@ assert all(p.is_valid for p in polygons), "a section crosses itself"
 areas = numpy.array([p.area for p in polygons])
 tip = mesh.bounds[1][0] if whole.exists() and blades == 2 else numpy.hypot(*mesh.vertices[:, :2].T).max()
 one = numpy.trapezoid(numpy.append(areas, 0.0), numpy.append(1e3 * radii, tip))
-sections = one * (blades if whole.exists() else 1)
+sections = one * (blades if whole.exists() else 1) - drilled
 off = mesh.volume / sections - 1
-print(f"volume {mesh.volume:.0f} mm3, of the sections {sections:.0f} mm3, {100 * off:+.3f} %")
+print(f"volume {mesh.volume:.0f} mm3, of the sections less the drilling {sections:.0f} mm3, {100 * off:+.3f} %")
 assert abs(off) < 0.005, off
 
 # At three quarters of the radius the leading edge is the one farther ahead (+z): it must lie where the blade turns to.

@@ -29,6 +29,13 @@ fn written(folder: &Path, files: Vec<spokeshave::bench::File>) {
     }
 }
 
+/// Holes of a job's hub, and the wood they take out of its boss, mm³.
+fn drilling(job: &Job) -> (u32, f64) {
+    let hub = job.wood.as_ref().and_then(|w| w.hub.as_ref()).unwrap();
+    let disc = |d: f64| 0.25e9 * std::f64::consts::PI * d * d;
+    (hub.bolts + 1, hub.thickness_m * (disc(hub.bore_m) + f64::from(hub.bolts) * disc(hub.bolt_diameter_m)))
+}
+
 #[test]
 fn validate_solid_trimesh() {
     for demo in &DEMOS {
@@ -47,7 +54,10 @@ fn validate_solid_trimesh() {
                 }
                 let folder = tempfile::tempdir().unwrap();
                 written(folder.path(), files(&bench(&job), Unit::Millimetre).unwrap());
-                judge("solid.py", &[text(folder.path()), &job.propeller.blades.to_string(), hand]);
+                let (holes, mm3) = if one_piece { drilling(&job) } else { (0, 0.0) };
+                let [blades, holes, mm3] =
+                    [job.propeller.blades.to_string(), holes.to_string(), mm3.to_string()];
+                judge("solid.py", &[text(folder.path()), &blades, hand, &holes, &mm3]);
             }
         }
     }

@@ -2,6 +2,7 @@
 
 use crate::job::Job;
 
+use super::drilling::Pattern;
 use super::error::{BenchError, Fault};
 use super::form::Form;
 use super::loft::{Boss, blade_rings, root_radius_m};
@@ -109,7 +110,11 @@ impl Blank {
         let back_m = middle - 0.5 * thickness_m;
         let boss = form.one_piece.then(|| {
             let half = 0.5 * boss_thickness_m.unwrap_or(thickness_m);
-            Boss { radius_m: form.blade.hub_radius_m, faces_m: [middle - half, middle + half] }
+            Boss {
+                radius_m: form.blade.hub_radius_m,
+                faces_m: [middle - half, middle + half],
+                drilled_m: Pattern::of(job).map_or(0.0, |p| p.reach_m()),
+            }
         });
         let half_width = plan_half_m(&rings, form);
         let needed_m = 2.0 * half_width.0;

@@ -80,6 +80,19 @@ pub enum Fault {
         /// How far it passes, mm.
         by_mm: f64,
     },
+    /// The hub's holes reach past its boss.
+    #[error(
+        "hub drilling: the holes reach {reach_mm:.1} mm from the axis, {by_mm:.1} mm farther than a boss of radius {hub_mm:.1} mm can hold; a smaller \
+         bolt circle or a larger propeller.hub_diameter_m"
+    )]
+    DrilledPastBoss {
+        /// How far they reach, mm.
+        reach_mm: f64,
+        /// Radius of the boss, mm.
+        hub_mm: f64,
+        /// How much too far, mm.
+        by_mm: f64,
+    },
     /// Two blades run into one another.
     #[error("r {radius_mm:.1} mm: neighbouring blades overlap by {by_mm:.1} mm")]
     BladesOverlap {

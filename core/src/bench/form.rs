@@ -1,7 +1,6 @@
 //! The blade as a form: the section at any radius, standing where it belongs.
 
-use crate::blade::Blade;
-use crate::curve::Curve;
+use crate::blade::{Blade, StackingLine};
 use crate::job::{Job, Making, PitchControl, Rotation};
 
 use super::error::{BenchError, Fault};
@@ -29,10 +28,7 @@ pub struct Form {
     /// Radius from which the tip is rounded, m.
     pub tip_from_m: f64,
     stations: Vec<(f64, Shape)>,
-    sweep: Option<Curve>,
-    rake: Option<Curve>,
-    /// Tangent of the lean ahead of the plane of rotation.
-    lean: f64,
+    line: StackingLine,
 }
 
 impl Form {
@@ -66,14 +62,8 @@ impl Form {
         if !faults.is_empty() {
             return Err(BenchError(faults));
         }
-        let line = |of: fn(&crate::job::LinePoint) -> f64| {
-            let x = making.stacking_line.iter().map(|p| p.radius_fraction * blade.radius_m).collect();
-            Curve::new(x, making.stacking_line.iter().map(of).collect())
-        };
         Ok(Self {
-            sweep: line(|p| p.sweep_m),
-            rake: line(|p| p.rake_m),
-            lean: job.wood.as_ref().map_or(0.0, |wood| wood.rake_deg.to_radians().tan()),
+            line: StackingLine::new(job, blade.radius_m),
             tip_from_m: tip_from_m(&making, blade),
             rotation: job.propeller.rotation,
             one_piece: matches!(job.propeller.pitch_control, PitchControl::Fixed {}),
@@ -104,8 +94,8 @@ impl Form {
     /// Where the stacking line runs at a radius, `[y, z]`, m.
     #[must_use]
     pub fn axis_m(&self, radius_m: f64) -> [f64; 2] {
-        let at = |curve: &Option<Curve>| curve.as_ref().map_or(0.0, |c| c.at(radius_m));
-        [-at(&self.sweep), at(&self.rake) + self.lean * radius_m]
+        let [y, z] = self.line.at(radius_m);
+        [y, z + self.line.lean * radius_m]
     }
 
     /// The section at a radius, standing where it belongs.
@@ -113,7 +103,7 @@ impl Form {
     pub fn ring(&self, radius_m: f64) -> Ring {
         let chord_m = self.chord_m(radius_m);
         let shape = self.shape(radius_m, chord_m);
-        let stands_on = match self.making.stacking_fraction {
+        let stands_on = match self.line.fraction {
             Some(share) => [share, 0.0],
             None => shape.centroid(),
         };

@@ -13,7 +13,7 @@ const BOSS_RINGS: u32 = 14;
 const BLADE_RINGS: f64 = 72.0;
 /// Rings over the rounded tip.
 const TIP_RINGS: u32 = 12;
-/// Up to this share of its radius the boss is a plain block.
+/// Up to this share of its radius the boss is a plain block, farther where it is drilled farther out.
 const PLAIN_BOSS: f64 = 0.8;
 /// Softness of the corner between boss and blade in plan, in hub radii.
 const FAIRING: f64 = 0.5;
@@ -28,6 +28,16 @@ pub struct Boss {
     pub radius_m: f64,
     /// Back and front face along the direction of flight, m.
     pub faces_m: [f64; 2],
+    /// How far its holes reach from the axis, m; 0 without any.
+    pub drilled_m: f64,
+}
+
+impl Boss {
+    /// Up to this distance from the axis it is a plain block, m.
+    pub(super) fn plain_m(&self) -> f64 {
+        let beside = 0.5 * (self.drilled_m + self.radius_m);
+        if self.drilled_m > 0.0 { beside.max(PLAIN_BOSS * self.radius_m) } else { PLAIN_BOSS * self.radius_m }
+    }
 }
 
 /// Radius from which on the blade is as drawn, m.
@@ -73,20 +83,19 @@ fn blade_radii_m(form: &Form) -> Vec<f64> {
 }
 
 fn boss_rings(form: &Form, boss: Boss, root: &Ring) -> Vec<Ring> {
-    let r = boss.radius_m;
+    let (r, plain) = (boss.radius_m, boss.plain_m());
     let across = (0..BOSS_RINGS).map(|i| {
         let turn = std::f64::consts::FRAC_PI_2 * f64::from(i) / f64::from(BOSS_RINGS);
-        PLAIN_BOSS * r * turn.sin()
+        plain * turn.sin()
     });
-    let out = (0..BOSS_RINGS)
-        .map(|i| PLAIN_BOSS * r + (root.radius_m - PLAIN_BOSS * r) * f64::from(i) / f64::from(BOSS_RINGS));
+    let out = (0..BOSS_RINGS).map(|i| plain + (root.radius_m - plain) * f64::from(i) / f64::from(BOSS_RINGS));
     let root_half = root.span(0).map(f64::abs).into_iter().fold(0.0, f64::max).min(r);
     across.chain(out).map(|x| boss_ring(boss, x, root, root_half, form)).collect()
 }
 
 fn boss_ring(boss: Boss, x: f64, root: &Ring, root_half_m: f64, form: &Form) -> Ring {
     let r = boss.radius_m;
-    let plain = PLAIN_BOSS * r;
+    let plain = boss.plain_m();
     let t = ((x - plain) / (root.radius_m - plain)).clamp(0.0, 1.0);
     let half_m = if x < plain {
         (r * r - x * x).sqrt()

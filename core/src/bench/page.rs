@@ -1,5 +1,7 @@
 //! Sheets of paper: their size, what stands on every one of them, and large drawings laid over several.
 
+use crate::CAUTIONS;
+
 use super::draw::{Anchor, Drawing, Layer, breadth_mm};
 
 /// A size of paper, upright.
@@ -16,18 +18,13 @@ pub enum Paper {
 const MARGIN_MM: f64 = 10.0;
 /// Room for the heading and for ruler and cautions, mm.
 const HEAD_MM: f64 = 9.0;
-const FOOT_MM: f64 = 21.0;
+const FOOT_MM: f64 = 28.0;
+/// From line to line of the cautions, mm.
+const CAUTION_MM: f64 = 3.1;
 /// By how much neighbouring sheets show the same, mm.
 const OVERLAP_MM: f64 = 12.0;
 /// Between parts side by side, mm.
 const GAP_MM: f64 = 6.0;
-
-/// What stands on every sheet.
-pub const CAUTIONS: [&str; 3] = [
-    "Before you act: a propeller can kill. All figures are estimates that need margin and test. Wood varies: inspect it, proof-load",
-    "and balance the blade. Nobody stands in the plane of the disc. Re-check hub-bolt torque as wood moves. Limits and approval belong",
-    "to the aviation authority, the engine maker and a licensed inspector or engineer, whose rules come first.",
-];
 
 impl Paper {
     /// Width and height, mm.
@@ -101,7 +98,7 @@ pub fn lay(title: &str, leaves: &[Leaf], paper: Paper) -> Vec<Sheet> {
     let of = sheets.len();
     for (i, sheet) in sheets.iter_mut().enumerate() {
         furniture(sheet, title, &format!("sheet {} of {of}, {}", i + 1, paper.name()));
-        ruler(&mut sheet.frame, [MARGIN_MM, MARGIN_MM + 11.0]);
+        ruler(&mut sheet.frame, [MARGIN_MM, MARGIN_MM + CAUTION_MM * CAUTIONS.len() as f64 + 1.0]);
     }
     sheets
 }
@@ -229,9 +226,11 @@ fn furniture(sheet: &mut Sheet, title: &str, number: &str) {
         frame.text([left + named, top - 3.5], 3.0, Anchor::Start, fitted(title, 3.0, room - named));
     }
     frame.line(Layer::Thin, [[left, top - 6.0], [right, top - 6.0]]);
-    let size = 2.8_f64.min((right - left) / CAUTIONS.iter().map(|c| breadth_mm(c, 1.0)).fold(1.0, f64::max));
+    let high = CAUTION_MM * CAUTIONS.len() as f64;
+    let widest = CAUTIONS.iter().map(|c| breadth_mm(c, 1.0)).fold(1.0, f64::max);
+    let size = 2.8_f64.min((right - left) / widest);
     for (i, line) in CAUTIONS.iter().enumerate() {
-        frame.text([left, MARGIN_MM + 7.0 - 3.3 * i as f64], size, Anchor::Start, *line);
+        frame.text([left, MARGIN_MM + high - CAUTION_MM * (i as f64 + 1.0)], size, Anchor::Start, *line);
     }
 }
 

@@ -58,6 +58,30 @@ impl Ring {
         0.5 * (0..n).map(cross).sum::<f64>().abs()
     }
 
+    /// The cut of the surface's triangles between this ring and the next one outward, a share of the way.
+    pub(super) fn between(&self, next: &Self, share: f64) -> Self {
+        let n = self.points.len();
+        let mix = |a: [f64; 2], b: [f64; 2]| [0, 1].map(|i| a[i] + share * (b[i] - a[i]));
+        // Along the side of a pair of triangles, then along its diagonal.
+        let pair = |k: usize| {
+            let (side, diagonal) = (self.points[k], self.points[(k + 1) % n]);
+            [mix(side, next.points[k]), mix(diagonal, next.points[k])]
+        };
+        Self {
+            radius_m: self.radius_m + share * (next.radius_m - self.radius_m),
+            points: (0..n).flat_map(pair).collect(),
+        }
+    }
+
+    /// By how much the next ring is turned against this one, rad, 0 to π.
+    pub(super) fn turned_rad(&self, next: &Self) -> f64 {
+        let [a, b] = [self, next].map(|r| {
+            let (lead, trail) = (r.leading_edge(), r.trailing_edge());
+            [lead[0] - trail[0], lead[1] - trail[1]]
+        });
+        (a[0] * b[1] - a[1] * b[0]).atan2(a[0] * b[0] + a[1] * b[1]).abs()
+    }
+
     /// Length of outline, m, between two places where the ring crosses itself; `None` where it does not.
     pub(super) fn crossing_m(&self) -> Option<f64> {
         // The ring closed by its own first point, so that the last piece is looked at too.

@@ -2,6 +2,7 @@
 
 mod card;
 mod hub;
+mod joint;
 mod layers;
 mod plan;
 mod side;
@@ -28,6 +29,9 @@ pub fn leaves(bench: &Bench, paper: Paper, unit: Unit) -> Vec<Leaf> {
         blank.push(hub::leaf(bench, unit));
     }
     leaves.extend(abreast("Blank and hub", blank, room));
+    if bench.blank.boss.is_some() && bench.form.blade.count > 2 {
+        leaves.push(joint::leaf(bench, unit, room));
+    }
     leaves.extend(template::leaves(bench, unit, room));
     leaves
 }

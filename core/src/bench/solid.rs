@@ -17,9 +17,9 @@ pub struct Solid {
 const BENT_TO: f64 = 1.6;
 
 impl Solid {
-    /// One blade, closed flat at its inner end.
+    /// One blade, closed flat at its inner end, for a propeller that turns clockwise seen from behind.
     #[must_use]
-    pub fn blade(rings: &[Ring], tip_m: f64, right_handed: bool) -> Self {
+    pub fn blade(rings: &[Ring], tip_m: f64) -> Self {
         let mut solid = Self::default();
         let Some(first) = rings.first() else { return solid };
         let ids: Vec<Vec<u32>> = rings.iter().map(|ring| solid.ring(ring, |p| p)).collect();
@@ -29,18 +29,12 @@ impl Solid {
         let middle = solid.add([first.radius_m, sum[0], sum[1]]);
         let ring = &ids[0];
         (0..ring.len()).for_each(|k| solid.triangles.push([ring[k], ring[(k + 1) % ring.len()], middle]));
-        solid.handed(right_handed)
+        solid
     }
 
-    /// A whole propeller of one piece: `rings` of one blade from the axis out, the boss among them.
+    /// A whole propeller of one piece that turns clockwise seen from behind: `rings` of one blade from the axis out, the boss among them.
     #[must_use]
-    pub fn propeller(
-        rings: &[Ring],
-        tip_m: f64,
-        blades: u32,
-        boss_radius_m: f64,
-        right_handed: bool,
-    ) -> Self {
+    pub fn propeller(rings: &[Ring], tip_m: f64, blades: u32, boss_radius_m: f64) -> Self {
         let mut solid = Self::default();
         let Some(first) = rings.first() else { return solid };
         let n = first.points.len();
@@ -62,7 +56,7 @@ impl Solid {
             solid.skin(&ids, rings, tip_m);
             solid.vertices[tip_from..].iter_mut().for_each(|v| *v = bend(j)(*v));
         }
-        solid.without_spares().handed(right_handed)
+        solid.without_spares()
     }
 
     /// Volume, m³.
@@ -76,7 +70,7 @@ impl Solid {
         self.triangles.iter().map(of).sum()
     }
 
-    fn add(&mut self, v: [f64; 3]) -> u32 {
+    pub(super) fn add(&mut self, v: [f64; 3]) -> u32 {
         self.vertices.push(v);
         self.vertices.len() as u32 - 1
     }
@@ -102,7 +96,7 @@ impl Solid {
     }
 
     /// Leaves out corners that no triangle uses.
-    fn without_spares(self) -> Self {
+    pub(super) fn without_spares(self) -> Self {
         let mut to = vec![u32::MAX; self.vertices.len()];
         let mut vertices = Vec::with_capacity(self.vertices.len());
         let triangles = self.triangles.iter().map(|t| {
@@ -120,7 +114,8 @@ impl Solid {
     }
 
     /// Mirrored for a propeller that turns the other way.
-    fn handed(mut self, right_handed: bool) -> Self {
+    #[must_use]
+    pub fn handed(mut self, right_handed: bool) -> Self {
         if !right_handed {
             self.vertices.iter_mut().for_each(|v| v[1] = -v[1]);
             self.triangles.iter_mut().for_each(|t| t.swap(1, 2));

@@ -6,6 +6,7 @@ use crate::job::{Job, Rotation};
 use crate::rig::Rig;
 
 use super::blank::{Blank, Heights};
+use super::drilling::Pattern;
 use super::error::{BenchError, Fault};
 use super::form::Form;
 use super::loft::{loft, root_radius_m};
@@ -14,6 +15,8 @@ use super::solid::Solid;
 
 /// How far (m) a section may pass the faces of the boss where it enters it.
 const BOSS_SLACK_M: f64 = 2e-4;
+/// Neighbouring rings turned by more are looked at in between as well: there the surface may cross itself where neither of them does.
+const TWISTED_RAD: f64 = 0.35;
 
 /// A station as it is carved.
 #[derive(Clone, Debug, PartialEq)]
@@ -66,7 +69,8 @@ impl Bench {
         let form = Form::new(job, blade)?;
         let blank = Blank::new(job, &form)?;
         let rings = loft(&form, blank.boss);
-        let faults = faults(&rings, &blank);
+        let mut faults = faults(&rings, &blank);
+        faults.extend(Pattern::of(job).and_then(|p| p.fault(&form)));
         if !faults.is_empty() {
             return Err(BenchError(faults));
         }
@@ -105,17 +109,25 @@ impl Bench {
         [1e3 * self.hand() * p[0], 1e3 * (p[1] - self.blank.back_m)]
     }
 
-    /// The closed surface: the whole propeller where it is of one piece, else one blade.
+    /// The closed surface: the whole propeller where it is of one piece, the holes of its hub drilled, else one blade.
     #[must_use]
     pub fn solid(&self) -> Solid {
-        self.solid_of(&self.rings)
+        let whole = self.unhanded(&self.rings);
+        let holes = self.blank.boss.and_then(|boss| Some((boss, Pattern::of(&self.job)?.holes())));
+        let drilled = holes.and_then(|(boss, holes)| whole.pierced(&holes, boss, self.form.blade.count));
+        drilled.unwrap_or(whole).handed(self.hand() > 0.0)
     }
 
     pub(super) fn solid_of(&self, rings: &[Ring]) -> Solid {
-        let (tip, right) = (self.form.blade.radius_m, self.hand() > 0.0);
+        self.unhanded(rings).handed(self.hand() > 0.0)
+    }
+
+    /// The surface as it is for a propeller that turns clockwise seen from behind.
+    fn unhanded(&self, rings: &[Ring]) -> Solid {
+        let tip = self.form.blade.radius_m;
         match self.blank.boss {
-            Some(boss) => Solid::propeller(rings, tip, self.form.blade.count, boss.radius_m, right),
-            None => Solid::blade(rings, tip, right),
+            Some(boss) => Solid::propeller(rings, tip, self.form.blade.count, boss.radius_m),
+            None => Solid::blade(rings, tip),
         }
     }
 
@@ -129,7 +141,9 @@ impl Bench {
 }
 
 fn faults(rings: &[Ring], blank: &Blank) -> Vec<Fault> {
-    let crossing = rings.iter().filter_map(|r| Some((r.radius_m, r.crossing_m()?)));
+    let twisted = rings.windows(2).filter(|w| w[0].turned_rad(&w[1]) > TWISTED_RAD);
+    let between = twisted.flat_map(|w| [0.25, 0.5, 0.75].map(|share| w[0].between(&w[1], share)));
+    let crossing = rings.iter().cloned().chain(between).filter_map(|r| Some((r.radius_m, r.crossing_m()?)));
     let worst = crossing.max_by(|a, b| a.1.total_cmp(&b.1));
     let mut faults: Vec<Fault> = worst
         .map(|(r, by)| Fault::CrossesItself { radius_mm: 1e3 * r, by_mm: 1e3 * by })

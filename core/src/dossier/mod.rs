@@ -66,7 +66,7 @@ pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper) -> Vec<Sheet> {
     let mut flow = Flow::new(paper, "Verdict");
     verdict::write(&mut flow, &told);
     flow.part("Before you act");
-    flow.list(&wood::CAUTIONS);
+    flow.list(&crate::CAUTIONS);
     inputs::write(&mut flow, &told);
     method::write(&mut flow, &told);
     curves::write(&mut flow, &told);

@@ -14,11 +14,7 @@ pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> 
         "Values: {}. Grain straight and along the blade, no knots, glue as strong as the wood.",
         beam.material.source
     ));
-    let lean = beam.rake_rad.to_degrees();
-    let stands = if lean == 0.0 { "does not lean".into() } else { format!("leans forward by {lean:.1}°") };
-    all.push(format!(
-        "The sections' centroids stand on a straight line that {stands}; the blade is clamped at the edge of the hub."
-    ));
+    all.push(format!("{} The blade is clamped at the edge of the hub.", stands(beam)));
     all.push(
         "Steady load only, without gyroscopic load, gust, engine pulse or strike. Bending is what is left when centrifugal force has pulled \
          the bent blade straighter; a stiffer piece of wood than the mean is relieved less."
@@ -35,6 +31,28 @@ pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> 
         silent.map(|c| format!("“{}” has no answer and is not in it. {}", c.name, c.state.sentence())),
     );
     all
+}
+
+/// Where the centroids stand.
+fn stands(beam: &BladeBeam) -> String {
+    let lean = beam.line.lean.atan().to_degrees();
+    let leaning = if lean == 0.0 { "does not lean".into() } else { format!("leans forward by {lean:.1}°") };
+    let [forward, behind] = beam.offsets_m(0.0);
+    let ahead = forward.iter().zip(&beam.radii_m).map(|(w, r)| w - beam.line.lean * r).collect::<Vec<f64>>();
+    let most = |of: &[f64]| of.iter().fold(0.0, |most: f64, v| if v.abs() > most.abs() { *v } else { most });
+    let [ahead, behind] = [ahead, behind].map(|o| 1e3 * most(&o));
+    if ahead.abs().max(behind.abs()) < 1e-6 {
+        return format!("The sections' centroids stand on a straight line that {leaning}.");
+    }
+    let side = |mm: f64, one: &str, other: &str| {
+        format!("{:.1} mm {}", mm.abs(), if mm < 0.0 { other } else { one })
+    };
+    format!(
+        "The sections stand as the job's bench.stacking says, on a blade that {leaning}: their centroids lie up to {} and {} of the radius through the \
+         axis, and centrifugal force bends and twists the blade by it.",
+        side(ahead, "ahead", "aft"),
+        side(behind, "behind (against the turning)", "before")
+    )
 }
 
 fn doubt(station: usize, doubt: Doubt, thickness_ratio: f64) -> String {

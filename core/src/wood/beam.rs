@@ -8,6 +8,7 @@ mod bending;
 mod figures;
 mod integrate;
 mod modes;
+mod offset;
 #[cfg(test)]
 mod tests;
 mod twisting;
@@ -15,4 +16,5 @@ mod twisting;
 pub use bending::{Bending, BendingMode};
 pub(crate) use figures::at;
 pub use integrate::{bending_n_m, first_moment, outboard, second_moment, tension_n, total};
+pub use offset::Offset;
 pub use twisting::Twisting;

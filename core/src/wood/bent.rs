@@ -1,7 +1,6 @@
 //! The blade bent by its load: centrifugal force pulls it straight and takes bending off it.
 
 use super::BladeBeam;
-use super::beam::{outboard, tension_n};
 use super::loads::BladeLoads;
 
 /// Deflection, and the bending that is left.
@@ -18,13 +17,15 @@ pub(super) struct Bent {
 impl Bent {
     /// The blade under loads, turned by `turn_rad` besides the drawing.
     ///
-    /// With w forward and u against the turning, what centrifugal force takes off at r is `Ω² ∫ m x (w(x) − w(r)) dx` and
-    /// `Ω² ∫ m (r u(x) − x u(r)) dx` from r to the tip: equilibrium of the bent blade for small deflections.
+    /// What it is bent by is an offset like the drawn ones ([`super::beam::Offset`]), for small deflections.
     pub(super) fn new(beam: &BladeBeam, loads: &BladeLoads, turn_rad: f64) -> Self {
         let stiffness = beam.stiffness(turn_rad);
         let bending = beam.bending(&stiffness, loads.rotation_rad_s);
         let deflection = bending
-            .deflection_m(&loads.forward_n_m, &loads.against_n_m)
+            .deflection_m(
+                [&loads.forward_n_m, &loads.against_n_m],
+                [&loads.offsets_m[0], &loads.offsets_m[1]],
+            )
             .filter(|all| all.iter().flatten().all(|v| v.is_finite()));
         let mut bent = Self {
             forward_n_m: loads.forward_bending_n_m.clone(),
@@ -38,16 +39,10 @@ impl Bent {
     }
 
     fn relieve(&mut self, beam: &BladeBeam, loads: &BladeLoads, deflection: &[[f64; 2]]) {
-        let (r, m, omega) = (&beam.radii_m, &beam.mass_kg_m, loads.rotation_rad_s);
-        let moved =
-            |side: usize| -> Vec<f64> { m.iter().zip(deflection).map(|(m, d)| m * d[side]).collect() };
-        let forward = tension_n(r, &moved(0), omega);
-        let against = outboard(r, &moved(1));
-        for i in 0..r.len() {
-            let [w, u] = deflection[i];
-            self.forward_n_m[i] -= forward[i] - w * loads.tension_n[i];
-            self.against_n_m[i] -= r[i] * omega * omega * against[i] - u * loads.tension_n[i];
-        }
+        let bent = [0, 1].map(|side| deflection.iter().map(|d| d[side]).collect());
+        let [forward, against] = beam.offset(&bent, loads.rotation_rad_s).relief_n_m();
+        self.forward_n_m.iter_mut().zip(forward).for_each(|(m, off)| *m -= off);
+        self.against_n_m.iter_mut().zip(against).for_each(|(m, off)| *m -= off);
     }
 }
 

@@ -5,7 +5,7 @@ use thiserror::Error;
 use super::material::{Material, material};
 use super::places::{Doubt, Place, places};
 use super::section::{Section, Shape};
-use crate::blade::Blade;
+use crate::blade::{Blade, StackingLine};
 use crate::curve::Curve;
 use crate::job::Job;
 use crate::rig::Rig;
@@ -54,8 +54,8 @@ pub struct BladeBeam {
     pub mass_kg_m: Vec<f64>,
     /// How far the blades are turned in the hub, rad; in the angles.
     pub turn_rad: f64,
-    /// Lean forward of the plane of rotation, rad.
-    pub rake_rad: f64,
+    /// The line the sections stand on.
+    pub line: StackingLine,
     /// Radii of all stations, m, and their sections' shapes.
     stations_m: Vec<f64>,
     drawn: Vec<Drawn>,
@@ -79,7 +79,6 @@ impl BladeBeam {
     }
 
     fn of(rig: &Rig, drawn: Vec<Drawn>, material: Material) -> Result<Self, WoodError> {
-        let wood = rig.job.wood.clone().unwrap_or_default();
         let blade = &rig.rotor.blade;
         let stations_m: Vec<f64> = blade.station_radii_m().collect();
         let radii_m = radii(blade, &stations_m);
@@ -90,7 +89,7 @@ impl BladeBeam {
             chords_m: radii_m.iter().map(|r| blade.cut(*r).chord_m).collect(),
             angles_rad: radii_m.iter().map(|r| blade.cut(*r).angle_rad + rig.turn_rad()).collect(),
             turn_rad: rig.turn_rad(),
-            rake_rad: wood.rake_deg.to_radians(),
+            line: StackingLine::new(&rig.job, blade.radius_m),
             places: places(&radii_m, &stations_m, &drawn),
             sections: Vec::new(),
             mass_kg_m: Vec::new(),

@@ -1,9 +1,9 @@
-//! What the air, the rotation and the lean do to one blade: forces and moments per metre of radius.
+//! What the air, the rotation and the sections' places do to one blade: forces and moments per metre of radius.
 
 use std::f64::consts::{FRAC_PI_2, PI};
 
 use super::BladeBeam;
-use super::beam::{at as at_radius, bending_n_m, tension_n};
+use super::beam::{at as at_radius, bending_n_m, outboard, tension_n};
 use crate::rotor::{Condition, Graded, Rotor};
 
 /// Place along the chord where the air's force acts before the stall, from the leading edge: thin aerofoil theory, the section's own moment apart.
@@ -14,15 +14,21 @@ const BREAKING_RAD: f64 = 5.0 * PI / 180.0;
 /// Loads of one blade at one condition, at the radii of its beam.
 #[derive(Clone, Debug)]
 pub(super) struct BladeLoads {
-    /// Forward along the axis, the relief by rake taken off, N/m.
+    /// Of the air, forward along the axis, N/m.
     pub(super) forward_n_m: Vec<f64>,
-    /// In the plane of rotation, against the turning, N/m.
+    /// Of the air, in the plane of rotation, against the turning, N/m.
     pub(super) against_n_m: Vec<f64>,
     /// Twisting about the line of centroids, towards coarser pitch, N m/m: centrifugal and of the air.
     pub(super) twisting_n: Vec<f64>,
+    /// Where the centroids stand beside the radius through the axis, forward and against the turning, m.
+    pub(super) offsets_m: [Vec<f64>; 2],
+    /// Twisting moment by those offsets, towards coarser pitch, N m.
+    pub(super) offset_twisting_n_m: Vec<f64>,
+    /// Forces across the blade outboard, forward and against the turning, N.
+    pub(super) across_n: [Vec<f64>; 2],
     /// Centrifugal tension, N.
     pub(super) tension_n: Vec<f64>,
-    /// Bending moments of the two loads, N m.
+    /// Bending moments of the two loads, what the offsets take off taken off, N m.
     pub(super) forward_bending_n_m: Vec<f64>,
     /// The same in the plane of rotation.
     pub(super) against_bending_n_m: Vec<f64>,
@@ -41,24 +47,35 @@ impl BladeLoads {
     pub(super) fn new(beam: &BladeBeam, rotor: &Rotor, at: &Condition) -> Self {
         let air = Air::of(beam, rotor, at);
         let omega = at.rotation_rad_s;
-        let lean = beam.rake_rad.tan();
         let on_beam = |which: usize| -> Vec<f64> {
             beam.radii_m.iter().map(|r| at_radius(&air.radii_m, &air.figures[which], *r)).collect()
         };
-        let (mut forward_n_m, against_n_m, mut twisting_n) = (on_beam(0), on_beam(1), on_beam(2));
+        let (forward_n_m, against_n_m, mut twisting_n) = (on_beam(0), on_beam(1), on_beam(2));
         let turn = beam.beyond_rad(at);
-        for (i, r) in beam.radii_m.iter().enumerate() {
-            // A blade that leans forward is pulled back by what centrifugal force has across it.
-            forward_n_m[i] -= lean * omega * omega * beam.mass_kg_m[i] * r;
-            twisting_n[i] += beam.centrifugal_twisting_n(i, turn, omega);
+        for (i, twisting) in twisting_n.iter_mut().enumerate() {
+            *twisting += beam.centrifugal_twisting_n(i, turn, omega);
         }
+        let offsets_m = beam.offsets_m(turn);
+        // A blade that stands ahead or aside is pulled back by what centrifugal force has across it.
+        let offset = beam.offset(&offsets_m, omega);
+        let less =
+            |all: Vec<f64>, off: &[f64]| -> Vec<f64> { all.iter().zip(off).map(|(a, b)| a - b).collect() };
+        let ([m, q], [f, g]) = (offset.relief_n_m(), offset.relief_n());
+        let r = &beam.radii_m;
         Self {
             tension_n: tension_n(&beam.radii_m, &beam.mass_kg_m, omega),
-            forward_bending_n_m: bending_n_m(&beam.radii_m, &forward_n_m),
-            against_bending_n_m: bending_n_m(&beam.radii_m, &against_n_m),
+            forward_bending_n_m: less(bending_n_m(r, &forward_n_m), &m),
+            against_bending_n_m: less(bending_n_m(r, &against_n_m), &q),
+            across_n: [less(outboard(r, &forward_n_m), &f), less(outboard(r, &against_n_m), &g)],
+            offset_twisting_n_m: if offset.is_none() {
+                vec![0.0; r.len()]
+            } else {
+                offset.twisting_n_m(&forward_n_m, &against_n_m)
+            },
             forward_n_m,
             against_n_m,
             twisting_n,
+            offsets_m,
             rotation_rad_s: omega,
         }
     }

@@ -43,13 +43,13 @@ impl Carried {
         let i = place.index;
         let (mt, mq) = (bent.forward_n_m[i], bent.against_n_m[i]);
         let (s, c) = (beam.angles_rad[i] + turn_rad).sin_cos();
-        let outboard = |q: &[f64]| super::beam::total(&beam.radii_m[i..], &q[i..]);
+        let twisting = super::beam::total(&beam.radii_m[i..], &loads.twisting_n[i..]);
         Self {
             tension_n: loads.tension_n[i],
             flat_n_m: mt * c + mq * s,
             edge_n_m: mq * c - mt * s,
-            shear_n: outboard(&loads.forward_n_m).hypot(outboard(&loads.against_n_m)),
-            twisting_n_m: outboard(&loads.twisting_n),
+            shear_n: loads.across_n[0][i].hypot(loads.across_n[1][i]),
+            twisting_n_m: twisting + loads.offset_twisting_n_m[i],
         }
     }
 

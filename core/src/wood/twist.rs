@@ -17,10 +17,11 @@ const SETTLED_RAD: f64 = 0.01 * std::f64::consts::PI / 180.0;
 
 /// Twist under loads at the beam's radii, rad, coarser positive. `None` where the blade does not stand against it.
 ///
-/// Centrifugal twisting moment, the air's moment about the centroid, and tension that straightens the drawn twist.
+/// Centrifugal twisting moment, the air's moment about the centroid, what centroids beside a straight line add, and tension that straightens the drawn twist.
 pub(super) fn twist_rad(beam: &BladeBeam, loads: &BladeLoads, turn_rad: f64) -> Option<Vec<f64>> {
     let figures = Bar::new(beam, loads.rotation_rad_s, turn_rad);
-    figures.twisting(beam, loads.rotation_rad_s).twist_rad(&loads.twisting_n, &beam.angles_rad)
+    let bar = figures.twisting(beam, loads.rotation_rad_s);
+    bar.twist_rad(&loads.twisting_n, &loads.offset_twisting_n_m, &beam.angles_rad)
 }
 
 /// Lowest natural frequencies of twist, rad/s.

@@ -42,7 +42,7 @@ pub fn bench() -> Html {
     html! {
         <aside class="caution" aria-label="Before you act at the bench">
             <b>{ "Before you act" }</b>
-            <ul>{ for spokeshave::wood::CAUTIONS.iter().map(|c| html! { <li>{ *c }</li> }) }</ul>
+            <ul>{ for spokeshave::CAUTIONS.iter().map(|c| html! { <li>{ *c }</li> }) }</ul>
         </aside>
     }
 }
@@ -61,7 +61,7 @@ pub fn logbook() -> Html {
 
 /// Before wood is cut by what stands on paper.
 pub fn paper() -> Html {
-    html! { <aside class="caution" aria-label="Before you act on paper">{ spokeshave::bench::CAUTIONS.join(" ") }</aside> }
+    html! { <aside class="caution" aria-label="Before you act on paper"><b>{ "Before you act. " }</b>{ spokeshave::CAUTIONS.join(" ") }</aside> }
 }
 
 /// At the foot of the page.

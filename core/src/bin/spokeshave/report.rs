@@ -2,7 +2,8 @@
 
 use std::path::PathBuf;
 
-use spokeshave::bench::{CAUTIONS, pdf};
+use spokeshave::CAUTIONS;
+use spokeshave::bench::pdf;
 use spokeshave::dossier::{Scales, dossier};
 
 use crate::bench::{PaperName, UnitName};
@@ -40,6 +41,11 @@ pub(crate) fn run(args: &Args) -> Outcome {
     let pages = dossier(&rig, &scales, args.paper.into());
     let fail = |e: std::io::Error| Stop::BadInput(format!("{}: {e}", args.pdf.display()));
     std::fs::write(&args.pdf, pdf(&rig.job.title, &pages)).map_err(fail)?;
-    print(&format!("{}  {} pages\n\n{}", args.pdf.display(), pages.len(), CAUTIONS.join(" ")))?;
+    print(&format!(
+        "{}  {} pages\n\nBefore you act: {}",
+        args.pdf.display(),
+        pages.len(),
+        CAUTIONS.join(" ")
+    ))?;
     Ok((0..rig.job.flight_points.len()).all(|i| rig.condition(i).is_some()))
 }

@@ -5,7 +5,7 @@
 //! blade is that of R. V. Southwell and F. Gough, ARC R&M 766, 1921: `ω² = ω0² + Ks Ω²`. Left out: shear, rotary inertia, Coriolis' force.
 
 use super::banded::Banded;
-use super::figures::{ELEMENTS, Tension, at, element_m, points};
+use super::figures::{ELEMENTS, Tension, at, element_m, points, slope};
 use super::modes::lowest;
 
 /// A beam in bending.
@@ -42,19 +42,24 @@ fn cubics(s: f64) -> ([f64; 4], [f64; 4], [f64; 4]) {
 }
 
 impl Bending<'_> {
-    /// Deflection out of the plane of rotation and in it, m, at the radii, under loads per metre, N/m, in the same two directions. `None` where the beam
-    /// does not stand.
+    /// Deflection out of the plane of rotation and in it, m, at the radii, under loads per metre, N/m, and from offsets of the unloaded beam, m, in the same two
+    /// directions: tension pulls those straight, `−∫ N w0′ w′ + Ω² m w0 w dx` (the last in the plane of rotation alone). `None` where the beam does not stand.
     #[must_use]
-    pub fn deflection_m(&self, out_n_m: &[f64], in_n_m: &[f64]) -> Option<Vec<[f64; 2]>> {
+    pub fn deflection_m(&self, loads_n_m: [&[f64]; 2], offsets_m: [&[f64]; 2]) -> Option<Vec<[f64; 2]>> {
         let (stiffness, _) = self.matrices();
         let mut load = vec![0.0; self.size()];
         let length = element_m(self.radii_m);
+        let tension = Tension::new(self.radii_m, self.mass_kg_m, self.rotation_rad_s);
         for (e, s, x, weight) in points(self.radii_m) {
-            let (value, ..) = cubics(s);
-            for (plane, q) in [out_n_m, in_n_m].into_iter().enumerate().take(self.planes()) {
-                for (k, v) in value.into_iter().enumerate() {
+            let (value, slopes, _) = cubics(s);
+            let figure = |values: &[f64]| at(self.radii_m, values, x);
+            let outward = figure(self.mass_kg_m) * self.rotation_rad_s.powi(2) * figure(offsets_m[1]);
+            for plane in 0..self.planes() {
+                let pull = tension.at(x) * slope(self.radii_m, offsets_m[plane], x) / length;
+                let q = figure(loads_n_m[plane]) + if plane == 1 { outward } else { 0.0 };
+                for k in 0..4 {
                     if let Some(i) = self.unknown(e, plane, k) {
-                        load[i] += at(self.radii_m, q, x) * v * lever(k, length) * weight;
+                        load[i] += (q * value[k] - pull * slopes[k]) * lever(k, length) * weight;
                     }
                 }
             }

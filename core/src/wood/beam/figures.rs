@@ -21,6 +21,12 @@ pub(crate) fn at(radii_m: &[f64], values: &[f64], x: f64) -> f64 {
     values[a] + share * (values[b] - values[a])
 }
 
+/// Slope at `x` of a figure that runs straight between the radii; that of the last piece outside.
+pub(super) fn slope(radii_m: &[f64], values: &[f64], x: f64) -> f64 {
+    let b = radii_m.partition_point(|r| *r <= x).clamp(1, radii_m.len() - 1);
+    (values[b] - values[b - 1]) / (radii_m[b] - radii_m[b - 1])
+}
+
 /// Tension at any radius, exact for a mass that runs straight between the radii.
 pub(super) struct Tension<'a> {
     radii_m: &'a [f64],

@@ -94,13 +94,25 @@ fn a_turned_section_vibrates_in_its_own_axes() {
 
 #[test]
 fn deflection_under_an_even_load_is_that_of_the_beam_tables() {
-    let (r, one) = (radii(0.3, 2.3), falling(0));
+    let (r, one, none) = (radii(0.3, 2.3), falling(0), vec![0.0; N]);
     let (ei, q) = (vec![5.0; N], vec![0.7; N]);
-    let tip = beam(&r, &one, &ei, 0.0).deflection_m(&q, &one).unwrap()[N - 1];
+    let tip = beam(&r, &one, &ei, 0.0).deflection_m([&q, &one], [&none, &none]).unwrap()[N - 1];
     near("tip", tip[0], 0.7 * 16.0 / (8.0 * 5.0), 1e-9);
     assert_eq!(tip[1], 0.0);
-    let turning = beam(&r, &one, &ei, 2.0).deflection_m(&q, &one).unwrap()[N - 1][0];
+    let turning = beam(&r, &one, &ei, 2.0).deflection_m([&q, &one], [&none, &none]).unwrap()[N - 1][0];
     assert!(turning < 0.7 * tip[0]);
+}
+
+/// A beam without stiffness of its own, turning, is a string: whatever its offset, it ends on the radius through its root.
+#[test]
+fn a_soft_beam_is_pulled_straight() {
+    let (r, one, none) = (radii(0.3, 2.3), falling(0), vec![0.0; N]);
+    let soft = vec![1e-5; N];
+    let bowed: Vec<f64> = r.iter().map(|x| 0.04 * (x - 0.3).powi(2)).collect();
+    let both = Bending { in_n_m2: Some([&soft, &none]), ..beam(&r, &one, &soft, 10.0) };
+    let bent = both.deflection_m([&none, &none], [&bowed, &bowed]).unwrap();
+    near("out", bent[N - 1][0], -bowed[N - 1], 5e-3);
+    near("in", bent[N - 1][1], -bowed[N - 1], 5e-3);
 }
 
 /// `N = ½ m Ω² (R² − r²)` of an even mass; `M = ½ q (R − r)²` of an even load.
@@ -134,13 +146,16 @@ fn twist_and_frequency_of_an_even_bar() {
     };
     let rest = bar.frequencies_rad_s(1).unwrap()[0];
     near("rest", rest, FRAC_PI_2 * (3.0 / 1e-6_f64).sqrt() / 2.0, 1e-4);
-    near("tip", bar.twist_rad(&one, &none).unwrap()[N - 1], 0.5 * 4.0 / 3.0, 1e-9);
+    near("tip", bar.twist_rad(&one, &none, &none).unwrap()[N - 1], 0.5 * 4.0 / 3.0, 1e-9);
+    // The same load as the moment it adds up to.
+    let carried: Vec<f64> = r.iter().map(|x| 2.0 - x).collect();
+    near("carried", bar.twist_rad(&none, &carried, &none).unwrap()[N - 1], 0.5 * 4.0 / 3.0, 1e-9);
     let held = Twisting { hold_n: &hold, ..bar }.frequencies_rad_s(1).unwrap()[0];
     near("held", held.powi(2) - rest.powi(2), 100.0, 1e-5);
     // Tension untwists: a bar of no torsional stiffness of its own straightens out.
     let soft = vec![1e-9; N];
     let angle: Vec<f64> = r.iter().map(|x| -0.2 * x).collect();
     let slack = Twisting { stiffness_n_m2: &soft, gyration_m2: &small, rotation_rad_s: 100.0, ..bar };
-    let twist = slack.twist_rad(&none, &angle).unwrap();
+    let twist = slack.twist_rad(&none, &none, &angle).unwrap();
     near("half way", twist[N / 2], 0.2, 1e-3);
 }

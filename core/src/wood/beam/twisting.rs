@@ -26,10 +26,10 @@ pub struct Twisting<'a> {
 }
 
 impl Twisting<'_> {
-    /// Twist at the radii, rad, under a twisting moment per metre, N m/m, and the tension on a bar of angle `angle_rad`. `None` where the bar does
-    /// not stand.
+    /// Twist at the radii, rad, under a twisting moment per metre, N m/m, a twisting moment carried besides, N m, and the tension on a bar of angle
+    /// `angle_rad`. `None` where the bar does not stand.
     #[must_use]
-    pub fn twist_rad(&self, moment_n: &[f64], angle_rad: &[f64]) -> Option<Vec<f64>> {
+    pub fn twist_rad(&self, moment_n: &[f64], carried_n_m: &[f64], angle_rad: &[f64]) -> Option<Vec<f64>> {
         let (stiffness, _) = self.matrices();
         let (length, root) = (element_m(self.radii_m), self.radii_m[0]);
         let tension = Tension::new(self.radii_m, self.mass_kg_m, self.rotation_rad_s);
@@ -38,7 +38,7 @@ impl Twisting<'_> {
         for (e, s, x, weight) in points(self.radii_m) {
             let figure = |values: &[f64]| at(self.radii_m, values, x);
             let (moment, slope) = (figure(moment_n), (angle(e + 1) - angle(e)) / length);
-            let untwist = tension.at(x) * figure(self.gyration_m2) * slope / length;
+            let untwist = (tension.at(x) * figure(self.gyration_m2) * slope - figure(carried_n_m)) / length;
             if e > 0 {
                 load[e - 1] += weight * (moment * (1.0 - s) + untwist);
             }

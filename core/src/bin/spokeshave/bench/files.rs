@@ -2,7 +2,8 @@
 
 use std::path::PathBuf;
 
-use spokeshave::bench::{Bench, CAUTIONS, File, Unit, files};
+use spokeshave::CAUTIONS;
+use spokeshave::bench::{Bench, File, Unit, files};
 use spokeshave::rig::Rig;
 
 use super::sheets::UnitName;
@@ -52,6 +53,6 @@ pub(super) fn made_ready(rig: &Rig) -> Result<Bench, Stop> {
 pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     let bench = made_ready(rig)?;
     args.out.write(&files(&bench, args.out.unit()).map_err(Stop::bad)?)?;
-    print(&format!("\n{}", CAUTIONS.join(" ")))?;
+    print(&format!("\nBefore you act: {}", CAUTIONS.join(" ")))?;
     Ok(true)
 }

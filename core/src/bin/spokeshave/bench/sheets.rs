@@ -1,7 +1,8 @@
 //! `spokeshave bench JOB sheets`: paper for the bench, full size.
 
 use clap::ValueEnum;
-use spokeshave::bench::{CAUTIONS, Paper, Unit, sheet_files};
+use spokeshave::CAUTIONS;
+use spokeshave::bench::{Paper, Unit, sheet_files};
 use spokeshave::rig::Rig;
 
 use super::files::{Folder, made_ready};
@@ -52,7 +53,7 @@ pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     let bench = made_ready(rig)?;
     args.out.write(&sheet_files(&bench, args.paper.into(), args.out.unit()))?;
     print(&format!(
-        "\nPrint at 100 %, never fitted to the page; measure the 100 mm bar on every sheet.\n{}",
+        "\nPrint at 100 %, never fitted to the page; measure the 100 mm bar on every sheet.\nBefore you act: {}",
         CAUTIONS.join(" ")
     ))?;
     Ok(true)

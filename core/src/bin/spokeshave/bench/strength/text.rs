@@ -20,7 +20,7 @@ pub(super) fn sheet(s: &Strength) -> String {
     parts.push(mass(s));
     parts.extend(s.hub.as_ref().map(hub));
     parts.push(list("Taken for granted", &s.assumptions));
-    parts.push(list("Before you act", &spokeshave::wood::CAUTIONS));
+    parts.push(list("Before you act", &spokeshave::CAUTIONS));
     parts.join("\n\n")
 }
 
