@@ -16,7 +16,7 @@ assert len(pdf) == len(sheets) > 3, (len(pdf), len(sheets))
 for page in pdf:
     long = judged(f"page {page.number + 1}", page, size)
     words = page.get_text("words")
-    assert "100 mm" in page.get_text() and "Before you act" in page.get_text()
+    assert "100 mm" in page.get_text() and "A propeller can kill" in page.get_text()
     # What a window cuts off is not on the page; the rest must be.
     shown = [w for w in words if w[0] > 0 and w[2] < page.rect.width and w[1] > 0 and w[3] < page.rect.height]
     heading = [w for w in words if w[4] == "sheet"]

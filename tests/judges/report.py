@@ -27,7 +27,7 @@ for page in pdf:
             # Boxes of words are as high as the font's tallest letters; what counts is that they are beside or under one another.
             assert wide < 0.5 or tall < 3.5, (page.number, a, b)
     said = page.get_text()
-    assert f"page {page.number + 1} of {len(pdf)}" in said and "Before you act" in said
+    assert f"page {page.number + 1} of {len(pdf)}" in said and "A propeller can kill" in said
     text += said
     curves += sum(len(path["items"]) > 9 for path in page.get_drawings())
 places = [text.find("\n" + part) for part in parts]
