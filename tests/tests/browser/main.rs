@@ -1,6 +1,7 @@
 //! The page in a real browser, opened from disk.
 
 mod access;
+mod carved;
 mod input;
 mod job;
 mod machine;
