@@ -58,8 +58,11 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
                 </div>
                 { for BladeFigure::ALL.iter().zip(&columns).map(column) }
             </div>
-            { for wrong.map(|s| html! { <Message shown={s.clone()} named=true /> }) }
-            { for props.doubts.iter().map(|d| doubted(&act, state, d)) }
+            // In a place of their own: beside the boxes a message that comes or goes would make the boxes anew and take the focus away.
+            <div class="carved-said">
+                { for wrong.map(|s| html! { <Message shown={s.clone()} named=true /> }) }
+                { for props.doubts.iter().map(|d| doubted(&act, state, d)) }
+            </div>
         </fieldset>
     }
 }

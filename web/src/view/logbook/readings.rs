@@ -86,11 +86,10 @@ fn row(act: &Act, state: &Seen, i: usize) -> Html {
                         onclick={choose(act, move |_: MouseEvent| LogbookChoice::Remove(i))}>{ "×" }</button>
                 </td>
             </tr>
-            if wrong {
-                <tr class="messages"><td colspan="11">
-                    { for boxes.iter().map(|s| html! { <Message shown={s.clone()} named=true /> }) }
-                </td></tr>
-            }
+            // Always there: a row that came and went would make the boxes anew and take the focus away.
+            <tr class="messages" hidden={!wrong}><td colspan="11">
+                { for boxes.iter().map(|s| html! { <Message shown={s.clone()} named=true /> }) }
+            </td></tr>
         </>
     }
 }
