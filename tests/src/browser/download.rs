@@ -38,11 +38,15 @@ impl Browser {
 }
 
 fn complete_file(folder: &Path) -> Result<Option<PathBuf>> {
-    let mut files = std::fs::read_dir(folder)?.flatten().map(|entry| entry.path());
-    // Chromium writes into a file of its own naming until all is there.
+    let files: Vec<PathBuf> = std::fs::read_dir(folder)?.flatten().map(|entry| entry.path()).collect();
+    // Chromium writes into a file of its own naming until all is there; the last name may stand beside it, empty, before.
     let partial = |file: &PathBuf| {
         let hidden = file.file_name().is_some_and(|name| name.to_string_lossy().starts_with('.'));
         hidden || file.extension().is_some_and(|extension| extension == "crdownload")
     };
-    Ok(files.find(|file| !partial(file)))
+    if files.iter().any(partial) {
+        return Ok(None);
+    }
+    let written = |file: &PathBuf| file.metadata().is_ok_and(|about| about.len() > 0);
+    Ok(files.into_iter().find(written))
 }
