@@ -15,7 +15,9 @@ fn chosen(state: &State, choice: WoodChoice) -> State {
 
 #[test]
 fn a_job_without_wood_shows_the_usual_one_and_takes_one_when_it_is_changed() {
-    let state = State::started(None, None);
+    let mut job = Job::clone(State::started(None, None).job());
+    job.wood = None;
+    let state = State::started(Some(&job.to_json()), None);
     let moisture = Field::Wood(WoodFigure::Moisture);
     assert_eq!(shown_text(state.job(), &[], state.units, moisture), "12");
     assert!(typed(&state, moisture, "12").job().wood.is_none());
