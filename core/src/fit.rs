@@ -35,6 +35,7 @@ mod root;
 mod settle;
 mod slipstream;
 mod take_off;
+mod top_near;
 mod top_speed;
 mod trail;
 mod worth;

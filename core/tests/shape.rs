@@ -5,8 +5,8 @@ use spokeshave::result::{Brief, Figure, Limit, Origin, State, Tolerance};
 use spokeshave::rig::Rig;
 use spokeshave::shape::adkins_liebeck::Wanted;
 use spokeshave::shape::{
-    Lift, LossTask, PitchBy, ShapeError, TwistBy, brief, error_costs, least_loss, pitch_diameter, twist,
-    twist_by,
+    Lift, LossTask, PitchBy, ShapeError, TwistBy, brief, error_costs, least_loss, pitch_diameter, sized,
+    twist, twist_by,
 };
 
 fn demo(index: usize) -> Rig {
@@ -286,4 +286,40 @@ fn the_chart_holds_the_drawn_propeller_and_its_limits() {
         let rpm = |p: usize| chart.cells[[p, 1]].as_ref().unwrap().standing_rpm.unwrap();
         assert!(rpm(0) > rpm(1) && rpm(1) > rpm(2), "a coarser propeller stands slower");
     }
+}
+
+/// Cells are led from one to the next; each must be what its blade gives by itself, also where the limit rpm comes in or no speed is met.
+#[test]
+fn top_speed_over_pitch_and_diameter_is_that_of_each_blade_alone() {
+    let mut held = [0, 0];
+    for d in 0..2 {
+        let rig = demo(d);
+        let mut point = rig.job.flight_points[0].clone();
+        (point.airspeed_m_s, point.setting) = (None, Setting::FullThrottle {});
+        let rig = Rig::new(&Job { flight_points: vec![point.clone()], ..rig.job }).unwrap();
+        let around =
+            |middle: f64| -> Vec<f64> { (0..9).map(|i| middle * (0.68 + 0.08 * f64::from(i))).collect() };
+        let (pitches, diameters) =
+            (around(rig.rotor.blade.pitch_075_m(0.0)), around(rig.job.propeller.diameter_m));
+        let chart =
+            pitch_diameter(&rig, 0, &pitches, &diameters, PitchBy::Scale, &Limits::default()).unwrap();
+        for ((p, d), cell) in chart.cells.indexed_iter() {
+            let Ok(alone) = sized(&rig, pitches[p], diameters[d], PitchBy::Scale) else {
+                assert!(cell.is_none());
+                continue;
+            };
+            let (led, alone) = (&cell.as_ref().unwrap().figures, brief(&alone, &point));
+            held[usize::from(led.held_at_limit)] += 1;
+            let same = |led: Option<f64>, alone: Option<f64>| match (led, alone) {
+                (Some(led), Some(alone)) => (led / alone - 1.0).abs() < 2e-5,
+                (led, alone) => led.is_none() && alone.is_none(),
+            };
+            let all = led.held_at_limit == alone.held_at_limit
+                && same(led.airspeed_m_s, alone.airspeed_m_s)
+                && same(led.rpm, alone.rpm)
+                && same(led.power_w, alone.power_w);
+            assert!(all, "{} m pitch, {} m: {led:?} {alone:?}", pitches[p], diameters[d]);
+        }
+    }
+    assert!(held.iter().all(|n| *n > 10), "{held:?}");
 }

@@ -2,6 +2,7 @@
 
 use super::full::Full;
 use super::settle::Met;
+use super::top_near::TopNear;
 use super::trail::Trail;
 use super::{Solver, condition, top_speed};
 use crate::air::Air;
@@ -14,7 +15,7 @@ use crate::rotor::{Condition, Loads};
 #[derive(Clone, Debug, Default)]
 pub struct Near {
     trail: Trail,
-    top_speed_m_s: Option<f64>,
+    top: Option<TopNear>,
 }
 
 /// An answer.
@@ -45,11 +46,9 @@ pub fn answer(rig: &Rig, point: &FlightPoint, air: Air, near: &mut Near) -> Resu
     let at = Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
     match point.setting {
         Setting::FullThrottle {} if point.airspeed_m_s.is_none() => {
-            let before = near.top_speed_m_s.map(|v| (v, near.trail.newest()));
-            let (full, trail) = top_speed::fastest_near(rig, &at, before)?;
-            near.trail = trail;
-            near.top_speed_m_s = Some(full.condition.airspeed_m_s);
-            Ok(full.into())
+            let led = near.top.take().and_then(|top| top.on(rig, &at));
+            let top = led.map_or_else(|| top_speed::fastest(rig, &at).map(TopNear::from), Ok)?;
+            Ok((*near.top.insert(top).full()).into())
         }
         Setting::FullThrottle {} => {
             let mut trail = near.trail.newest();

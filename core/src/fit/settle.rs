@@ -134,7 +134,7 @@ impl Demand<'_> {
         };
         let guess = trail.guess(free, self.at.airspeed_m_s, &search.range);
         if guess.is_none()
-            && let Some(missed) = self.surely_missed(free, &search.range)
+            && let Some(missed) = self.surely_missed(free, &search.range, trail)
         {
             return Err(missed);
         }
@@ -153,11 +153,11 @@ impl Demand<'_> {
     }
 
     /// Why nothing in a range meets the demand, where a few looks by few elements leave no doubt of it.
-    fn surely_missed(&self, free: Free, range: &RangeInclusive<f64>) -> Option<Missed> {
+    fn surely_missed(&self, free: Free, range: &RangeInclusive<f64>, trail: &Trail) -> Option<Missed> {
         let width = range.end() - range.start();
         let value = |i: u32| {
             let at = self.with(free, range.start() + width * f64::from(i) / f64::from(FEW));
-            (self.spare)(&self.rig.rotor.rough_loads(&at), &at)
+            (self.spare)(&self.rig.rotor.rough_loads_near(&at, &mut trail.elements.borrow_mut()), &at)
         };
         let first = value(0);
         let values = (0..=FEW).map(|i| if i == 0 { first } else { value(i) });

@@ -21,49 +21,23 @@ const FIRST: f64 = 0.7;
 /// Where a multirotor's steps begin, m/s.
 const FIRST_CLIMBING_M_S: f64 = 1.0;
 /// Fastest speed considered, as a Mach number.
-const FASTEST_MACH: f64 = 0.7;
-/// How far either way of a near answer the next is sought, as a share of it.
-const NEAR: f64 = 0.06;
+pub(super) const FASTEST_MACH: f64 = 0.7;
 /// Thrust that may be left over, as a share of it.
 const MET_SHARE: f64 = 1e-3;
 
 /// The largest speed at which thrust still equals drag at full throttle, at the air of `at`.
 ///
 /// # Errors
-/// No aircraft or engine, or thrust below drag at every speed.
+/// No aircraft or engine, thrust below drag at every speed, or the engine's limit rpm passed.
 pub(super) fn condition(rig: &Rig, at: &Condition) -> Result<Condition, State> {
-    top(rig, at, false).map(|full| full.condition)
+    let full = fastest(rig, at)?;
+    if full.held { Err(State::OverLimitRpm) } else { Ok(full.condition) }
 }
 
 /// The same or, where the engine's limit rpm comes first, the fastest level flight throttled back to it.
 pub(super) fn fastest(rig: &Rig, at: &Condition) -> Result<Full, State> {
-    match top(rig, at, false) {
-        Err(State::OverLimitRpm) => held(rig, at),
-        answer => answer,
-    }
-}
-
-/// The same from the answer of a propeller a little different, where it leads there.
-pub(super) fn fastest_near(
-    rig: &Rig,
-    at: &Condition,
-    near: Option<(f64, Trail)>,
-) -> Result<(Full, Trail), State> {
-    let exact = Chase::new(Solver { rig, rough: false }, at, true)?;
-    let rough = Chase::new(Solver { rig, rough: true }, at, true)?;
-    let found =
-        near.and_then(|(v, trail)| exact.met_from(&rough, (1.0 - NEAR) * v, (1.0 + NEAR) * v, &trail));
-    found.map_or_else(|| fastest(rig, at).map(|full| (full, Trail::default())), Ok)
-}
-
-/// The fastest level flight within the engine's limit rpm, throttled back to it where full throttle would pass it.
-pub(super) fn held(rig: &Rig, at: &Condition) -> Result<Full, State> {
-    top(rig, at, true)
-}
-
-fn top(rig: &Rig, at: &Condition, hold: bool) -> Result<Full, State> {
-    let exact = Chase::new(Solver { rig, rough: false }, at, hold)?;
-    let rough = Chase::new(Solver { rig, rough: true }, at, hold)?;
+    let exact = Chase::new(Solver { rig, rough: false }, at)?;
+    let rough = Chase::new(Solver { rig, rough: true }, at)?;
     let found = rough.step_by_step().ok().and_then(|(low, high, _)| exact.met(&rough, low, high));
     if let Some(full) = found {
         return Ok(full);
@@ -77,20 +51,17 @@ struct Chase<'r> {
     solver: Solver<'r>,
     aircraft: &'r Aircraft,
     at: Condition,
-    /// Whether the throttle may be drawn back to hold the limit rpm.
-    hold: bool,
 }
 
 impl<'r> Chase<'r> {
-    fn new(solver: Solver<'r>, at: &Condition, hold: bool) -> Result<Self, State> {
+    fn new(solver: Solver<'r>, at: &Condition) -> Result<Self, State> {
         let aircraft = solver.rig.aircraft.as_ref().ok_or(State::NeedsAircraft)?;
         solver.rig.shaft.as_ref().ok_or(State::NeedsEngine)?;
-        Ok(Self { solver, aircraft, at: *at, hold })
+        Ok(Self { solver, aircraft, at: *at })
     }
 
     fn full(&self, airspeed_m_s: f64, trail: &mut Trail) -> Result<Full, State> {
-        let full = self.solver.full(&Condition { airspeed_m_s, ..self.at }, trail)?;
-        if full.held && !self.hold { Err(State::OverLimitRpm) } else { Ok(full) }
+        self.solver.full(&Condition { airspeed_m_s, ..self.at }, trail)
     }
 
     /// Thrust above what is asked.
@@ -118,6 +89,8 @@ impl<'r> Chase<'r> {
                     _ if last.is_some() => break,
                     _ => limit = State::OutOfReach,
                 },
+                // Too slow for the engine to turn it; the wind of more speed may help.
+                Err(State::EngineCannotTurnIt) if last.is_none() => limit = State::EngineCannotTurnIt,
                 // Past the engine's range before thrust falls to drag: that is what stops the aircraft.
                 Err(state) => {
                     limit = state;
@@ -139,12 +112,7 @@ impl<'r> Chase<'r> {
     /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends
     /// first.
     fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Full> {
-        self.met_from(rough, low, high, &Trail::default()).map(|met| met.0)
-    }
-
-    /// The same with an answer near by to begin from, and the last one on the way.
-    fn met_from(&self, rough: &Self, low: f64, high: f64, from: &Trail) -> Option<(Full, Trail)> {
-        let (trail, rough_trail) = (RefCell::new(from.clone()), RefCell::new(from.clone()));
+        let (trail, rough_trail) = <(RefCell<Trail>, RefCell<Trail>)>::default();
         let search = Search {
             range: low..=high,
             steps: 1,
@@ -155,6 +123,6 @@ impl<'r> Chase<'r> {
         let top = search.root().ok()?.0.x;
         let full = self.full(top, &mut trail.borrow_mut()).ok()?;
         let spare = self.spare_n(&full)?.abs();
-        (spare < MET_SHARE * full.loads.thrust_n).then(|| (full, trail.into_inner().newest()))
+        (spare < MET_SHARE * full.loads.thrust_n).then_some(full)
     }
 }

@@ -63,7 +63,7 @@ fn figure(rig: &Rig, point: &FlightPoint, turn_deg: f64) -> Option<f64> {
             Some(super::power_w(&met.loads, &met.condition))
         }
         Setting::FullThrottle {} if point.airspeed_m_s.is_none() => {
-            Some(top_speed::held(rig, &at).ok()?.condition.airspeed_m_s)
+            Some(top_speed::fastest(rig, &at).ok()?.condition.airspeed_m_s)
         }
         Setting::FullThrottle {} => Some(all * solver.full(&at, &mut trail).ok()?.loads.thrust_n),
         Setting::Throttle { fraction } => {

@@ -61,6 +61,12 @@ impl<'f> Blend<'f> {
         self.parts().map(|(l, w)| w * l.landmarks().stall).sum()
     }
 
+    /// The most that its coefficients rise with the angle of attack; see [`Local::steepest`].
+    #[must_use]
+    pub fn steepest(&self) -> f64 {
+        self.parts().map(|(l, w)| w * l.steepest()).sum()
+    }
+
     /// Angle of greatest lift downward, rad.
     #[must_use]
     pub fn negative_stall_rad(&self) -> f64 {
@@ -124,26 +130,25 @@ const NEAR_ZERO_RAD: f64 = 1e-7;
 const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
-/// The most that the rises of lift and drag coefficients with the angle of attack add up to in the shipped tables where they
-/// hold, at the steepest stall, with the coefficients themselves, 1/rad.
-///
-/// Looked at in steps of 0.05 degrees: 63 is the most (Clark Y at a Reynolds number of 30,000). A steeper table of a user, or the windmill brake
-/// state, may break the bound: a pair of roots that close together is then passed over, as by the fixed step before it. The
-/// tests count how often against a fine scan.
-const STEEPEST_SECTION: f64 = 65.0;
 /// The most that the momentum terms of N (times sin 2φ) and of M rise or fall with φ, 1/rad: `4 F` and `4 F cos 2φ`, and what Prandtl's
 /// factor adds where it changes fastest, at `f = 0.8` of both ends.
+///
+/// With the most that the section's part can rise they bound the march's steps. The windmill brake state may break that bound: a pair of
+/// roots that close together is then passed over, as by a fixed step. The tests count how often against a fine scan.
 const STEEPEST_MOMENTUM: (f64, f64) = (5.1, 6.1);
+/// From this blade angle on lift without inflow is not below zero, rad; below it is looked up.
+const SURELY_POSITIVE_RAD: f64 = 0.15;
 /// Up to this share of the stall angle lift rises steeply.
 const STEEP: f64 = 0.75;
 /// Of the inflow angle (rad) and of the residual over `hypot(V, Ω r)`.
 const CONVERGED: f64 = 1e-12;
 const MOST_PASSES: usize = 100;
 
-/// V and Ω r over `hypot(V, Ω r)`.
+/// V and Ω r over `hypot(V, Ω r)`, and the most that the section's coefficients rise, 1/rad.
 struct Flow {
     turning: f64,
     axial: f64,
+    section_steepest: f64,
 }
 
 impl Flow {
@@ -176,7 +181,8 @@ impl Element<'_> {
             flow.residual(&self.terms(phi))
         };
         let (brackets, count) = self.brackets();
-        let phi = brackets[..count].iter().find_map(|&(lo, hi)| self.nearest_root(lo, hi, &residual))?;
+        let phi =
+            brackets[..count].iter().find_map(|&(lo, hi)| self.nearest_root(lo, hi, &flow, &residual))?;
         Some(self.balanced(phi, lookups.get() + 1))
     }
 
@@ -200,7 +206,11 @@ impl Element<'_> {
 
     fn flow(&self) -> Flow {
         let speed = self.axial_m_s.hypot(self.turning_m_s);
-        Flow { turning: self.turning_m_s / speed, axial: self.axial_m_s / speed }
+        Flow {
+            turning: self.turning_m_s / speed,
+            axial: self.axial_m_s / speed,
+            section_steepest: self.section.steepest(),
+        }
     }
 
     fn terms(&self, phi: f64) -> Terms {
@@ -230,7 +240,7 @@ impl Element<'_> {
         const REVERSED: (f64, f64) = (-FRAC_PI_2, -NEAR_ZERO_RAD);
         const BEHIND: (f64, f64) = (FRAC_PI_2, PI - NEAR_ZERO_RAD);
         let (v, u) = (self.axial_m_s, self.turning_m_s);
-        let cl0 = self.section.at(self.angle_rad).cl;
+        let cl0 = if self.surely_ahead() { 0.0 } else { self.section.at(self.angle_rad).cl };
         if v == 0.0 {
             return if cl0 >= 0.0 { ([AHEAD, REVERSED, BEHIND], 2) } else { ([REVERSED, AHEAD, BEHIND], 2) };
         }
@@ -241,12 +251,17 @@ impl Element<'_> {
         }
     }
 
+    /// Whether lift without inflow is not below zero, so that the first place to look is the flow from ahead, without a look.
+    fn surely_ahead(&self) -> bool {
+        (SURELY_POSITIVE_RAD..FRAC_PI_2).contains(&self.angle_rad)
+    }
+
     /// The root of least `|α|` between two inflow angles.
     ///
     /// Well between the stall angles lift rises steeply with α, so that at most one root lies on either side of α = 0 and
     /// two looks tell. Towards stall, where drag rises faster than lift, roots may come in pairs: from there on the march
     /// takes small steps.
-    fn nearest_root(&self, lo: f64, hi: f64, residual: &impl Fn(f64) -> f64) -> Option<f64> {
+    fn nearest_root(&self, lo: f64, hi: f64, flow: &Flow, residual: &impl Fn(f64) -> f64) -> Option<f64> {
         let start = self.angle_rad.clamp(lo, hi);
         let at_start = residual(start);
         let (steep_down, steep_up) = self.steep_rad();
@@ -260,7 +275,9 @@ impl Element<'_> {
             if (self.angle_rad - window).abs() >= reach {
                 continue;
             }
-            let found = self.first_root((start, at_start), window, end, reach, residual);
+            let onward = |(phi, value): (f64, f64)| stepped(phi, end, self.clear_rad(phi, value, end, flow));
+            let first = if window == start { onward((start, at_start)) } else { window };
+            let found = self.first_root((start, at_start), first, (end, reach), &onward, residual);
             let nearer = |phi: &f64| (self.angle_rad - phi).abs() < reach;
             best = found.filter(nearer).or(best);
         }
@@ -273,18 +290,16 @@ impl Element<'_> {
         (STEEP * down.min(0.0), STEEP * up.max(0.0))
     }
 
-    /// The first root going from `start` over `window` in one look, then in steps to `end` or past `reach` from α = 0.
+    /// The first root going from `start` to `next` and on to `end` or past `reach` from α = 0.
     fn first_root(
         &self,
         start: (f64, f64),
-        window: f64,
-        end: f64,
-        reach: f64,
+        mut next: f64,
+        (end, reach): (f64, f64),
+        onward: &impl Fn((f64, f64)) -> f64,
         residual: &impl Fn(f64) -> f64,
     ) -> Option<f64> {
-        let onward = |(phi, value): (f64, f64)| stepped(phi, end, value.abs() / self.steepest(phi, end));
         let mut here = start;
-        let mut next = if window == start.0 { onward(start) } else { window };
         while here.0 != end && (self.angle_rad - here.0).abs() < reach {
             let there = (next, residual(next));
             if there.1 == 0.0 {
@@ -305,13 +320,17 @@ impl Element<'_> {
         None
     }
 
+    /// How far towards `end` the residual cannot come to zero, from its value at an inflow angle, rad.
+    fn clear_rad(&self, phi: f64, value: f64, end: f64, flow: &Flow) -> f64 {
+        value.abs() / self.steepest(phi, end, flow)
+    }
+
     /// The most that the residual over `hypot(V, Ω r)` rises or falls with φ between two inflow angles, 1/rad.
-    fn steepest(&self, a: f64, b: f64) -> f64 {
-        let flow = self.flow();
+    fn steepest(&self, a: f64, b: f64, flow: &Flow) -> f64 {
         let most = a.abs().max(b.abs());
         let sin_2phi = if most < FRAC_PI_4 { (2.0 * most).sin() } else { 1.0 };
         let (n, m) = STEEPEST_MOMENTUM;
-        flow.turning * n * sin_2phi + flow.axial.abs() * m + self.solidity * STEEPEST_SECTION
+        flow.turning * n * sin_2phi + flow.axial.abs() * m + self.solidity * flow.section_steepest
     }
 
     fn balanced(&self, phi: f64, lookups: u32) -> Balance {

@@ -28,7 +28,7 @@ pub struct About {
     pub korn_factor: f64,
 }
 
-/// Angles that tell what a polar covers, rad.
+/// Angles that tell what a polar covers, rad, and how steep it is.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
 pub struct Landmarks {
     /// Zero lift.
@@ -41,6 +41,9 @@ pub struct Landmarks {
     pub first: f64,
     /// Last row.
     pub last: f64,
+    /// The most that the rises of lift and drag coefficient with the angle add up to anywhere, with the coefficients
+    /// themselves, 1/rad.
+    pub steepest: f64,
 }
 
 /// A family of section polars, by thickness and Reynolds number.
@@ -101,8 +104,9 @@ impl Family {
             let found = format!("{} different angles in {} polars", grid.len(), tables.len());
             return Err(TableError::new("polars", found, "polars that share their angles, or fewer"));
         }
-        let nodes = tables.iter().flat_map(|t| on_grid(t, &grid)).collect();
-        let entries = order.iter().map(|p| entry(p)).collect();
+        let nodes: Vec<[f64; 4]> = tables.iter().flat_map(|t| on_grid(t, &grid)).collect();
+        let own_nodes = nodes.chunks(grid.len());
+        let entries = order.iter().zip(own_nodes).map(|(p, own)| entry(p, steepest(own, &grid))).collect();
         Ok(Self { about, bins: bins_of(&grid), grid, nodes, polars: entries, rows: rows_of(&order) })
     }
 
@@ -111,7 +115,11 @@ impl Family {
     pub fn scaled(&self, lift: f64, drag: f64) -> Self {
         let nodes =
             self.nodes.iter().map(|[cl, dcl, cd, dcd]| [lift * cl, lift * dcl, drag * cd, drag * dcd]);
-        Self { nodes: nodes.collect(), ..self.clone() }
+        let mut scaled = Self { nodes: nodes.collect(), ..self.clone() };
+        for polar in &mut scaled.polars {
+            polar.landmarks.steepest *= lift.max(drag);
+        }
+        scaled
     }
 
     /// Thickness ratios covered; `None` when the polars hold for one section only.
@@ -294,11 +302,11 @@ fn rows_of(order: &[&Polar]) -> Vec<(f64, Range<usize>)> {
     rows
 }
 
-fn entry(polar: &Polar) -> Entry {
+fn entry(polar: &Polar, steepest: f64) -> Entry {
     Entry {
         ln_reynolds: polar.reynolds.unwrap_or(1.0).max(1.0).ln(),
         mach: polar.mach,
-        landmarks: landmarks(polar),
+        landmarks: Landmarks { steepest, ..landmarks(polar) },
     }
 }
 
@@ -321,7 +329,27 @@ fn landmarks(polar: &Polar) -> Landmarks {
         let share = -w[0].cl / (w[1].cl - w[0].cl);
         (w[0].alpha_deg + share * (w[1].alpha_deg - w[0].alpha_deg)).to_radians()
     });
-    Landmarks { zero_lift, stall, negative_stall, first, last }
+    Landmarks { zero_lift, stall, negative_stall, first, last, steepest: 0.0 }
+}
+
+/// See [`Landmarks::steepest`].
+fn steepest(nodes: &[[f64; 4]], grid: &[f64]) -> f64 {
+    let pairs = nodes.windows(2).zip(grid.windows(2));
+    let rises = pairs.map(|(n, x)| {
+        let ([cl0, dcl0, cd0, dcd0], [cl1, dcl1, cd1, dcd1]) = (n[0], n[1]);
+        let h = x[1] - x[0];
+        let own = cl0.abs().max(cl1.abs()) + cd0.max(cd1);
+        own + steepest_of_cubic((cl1 - cl0) / h, dcl0, dcl1) + steepest_of_cubic((cd1 - cd0) / h, dcd0, dcd1)
+    });
+    rises.fold(0.0, f64::max)
+}
+
+/// The greatest size of the slope of a cubic between two places, from its mean and those at its ends.
+fn steepest_of_cubic(mean: f64, first: f64, last: f64) -> f64 {
+    let (a, b) = (3.0 * (first + last - 2.0 * mean), 6.0 * mean - 4.0 * first - 2.0 * last);
+    let ends = first.abs().max(last.abs());
+    let vertex = -0.5 * b / a;
+    if (0.0..1.0).contains(&vertex) { ends.max((first + 0.5 * b * vertex).abs()) } else { ends }
 }
 
 #[cfg(test)]

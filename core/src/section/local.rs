@@ -54,6 +54,16 @@ const DELAY_FULL_RAD: f64 = 30.0 * DEG;
 /// Stall delay is gone from this angle on, rad.
 const DELAY_NONE_RAD: f64 = 50.0 * DEG;
 
+/// The most that the delay of stall adds to the rise for each 1 of its factor, 1/rad: potential lift less the section's is at
+/// most about 4, let in or faded out over at least 7 degrees, and rises itself by 2π.
+const DELAY_STEEPEST: f64 = 40.0;
+/// Lift coefficients that sections do not pass.
+const MOST_LIFT: f64 = 2.0;
+/// Growth of lift with the Mach number stops below this by Korn's relation.
+const FASTEST_IN_GROWTH: f64 = 0.9;
+/// The most that Lock's law rises with the lift coefficient, where it reaches [`MOST_DRAG_RISE`]: `0.1 · 80 e³`, `e = 0.35`.
+const LOCK_STEEPEST: f64 = 0.343;
+
 impl<'f> Local<'f> {
     /// A family at a station.
     #[must_use]
@@ -89,6 +99,22 @@ impl<'f> Local<'f> {
         &self.landmarks
     }
 
+    /// The most that the rises of lift and drag coefficient with the angle add up to, with the coefficients themselves, 1/rad:
+    /// the tables' own, and what compressibility and the delay of stall can make of it.
+    #[must_use]
+    pub fn steepest(&self) -> f64 {
+        let table = self.landmarks.steepest;
+        let delayed = table + self.stall_delay * (table + DELAY_STEEPEST);
+        if self.mach == 0.0 {
+            return delayed;
+        }
+        let m = self.mach.min(FASTEST_IN_GROWTH);
+        let growth = 1.0 / (1.0 - m * m).sqrt();
+        let diverges = self.mach > self.korn - LOCK_MARGIN - 0.1 * MOST_LIFT;
+        let drag_rise = if diverges { LOCK_STEEPEST } else { 0.0 };
+        growth * (1.0 + drag_rise) * delayed + (growth - 1.0) * MOST_LIFT / FADE_RAD
+    }
+
     /// Whether thickness or Reynolds number lay outside the tables.
     #[must_use]
     pub fn outside(&self) -> Outside {
@@ -96,13 +122,14 @@ impl<'f> Local<'f> {
     }
 
     fn delayed(&self, alpha: f64, cl: f64) -> f64 {
-        if alpha <= self.landmarks.zero_lift || alpha >= DELAY_NONE_RAD {
+        let (zero_lift, stall) = (self.landmarks.zero_lift, self.landmarks.stall);
+        // From zero lift to stall the loss is viscous, not separation: let the delay in over the last half.
+        let onset = zero_lift + 0.5 * (stall - zero_lift);
+        if alpha <= onset.max(zero_lift) || alpha >= DELAY_NONE_RAD {
             return 0.0;
         }
-        let potential = std::f64::consts::TAU * (alpha - self.landmarks.zero_lift).sin();
-        // From zero lift to stall the loss is viscous, not separation: let the delay in over the last half.
-        let onset = self.landmarks.zero_lift + 0.5 * (self.landmarks.stall - self.landmarks.zero_lift);
-        let let_in = ((alpha - onset) / (self.landmarks.stall - onset).max(DEG)).clamp(0.0, 1.0);
+        let potential = std::f64::consts::TAU * (alpha - zero_lift).sin();
+        let let_in = ((alpha - onset) / (stall - onset).max(DEG)).min(1.0);
         let fade = ((DELAY_NONE_RAD - alpha) / (DELAY_NONE_RAD - DELAY_FULL_RAD)).min(1.0);
         self.stall_delay * let_in * fade * (potential - cl).max(0.0)
     }
@@ -133,6 +160,7 @@ impl Mul<f64> for Landmarks {
             negative_stall: self.negative_stall * w,
             first: self.first * w,
             last: self.last * w,
+            steepest: self.steepest * w,
         }
     }
 }
@@ -145,6 +173,7 @@ impl Sum for Landmarks {
             negative_stall: a.negative_stall + b.negative_stall,
             first: a.first + b.first,
             last: a.last + b.last,
+            steepest: a.steepest + b.steepest,
         })
     }
 }

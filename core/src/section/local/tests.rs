@@ -67,3 +67,36 @@ fn rotation_gives_back_lift_past_stall_and_none_before() {
     assert_eq!(gain(50.0), 0.0);
     assert_eq!(gain(-15.0), 0.0);
 }
+
+/// Looked at in steps of 0.1 degrees over 400 stations of every shipped section, with and without Mach number and delay of stall.
+#[test]
+fn coefficients_nowhere_rise_more_than_the_bound_says() {
+    const STEP: f64 = 0.1 * DEG;
+    let library = crate::section::library();
+    for name in library.names() {
+        let family = library.family(name, 9.0).unwrap();
+        for i in 0..400 {
+            let of = |k: u32, parts: u32| f64::from(i / k % parts) / f64::from(parts - 1);
+            let local = Local::new(
+                family,
+                Situation {
+                    thickness_ratio: 0.05 + 0.2 * of(1, 10),
+                    reynolds: 3e4 * 200f64.powf(of(10, 10)),
+                    mach: 0.9 * of(100, 4),
+                    stall_delay: of(1, 2) * of(10, 3),
+                },
+            );
+            let bound = local.steepest();
+            for j in -600..900 {
+                let (a, b) = (local.at(f64::from(j) * STEP), local.at(f64::from(j + 1) * STEP));
+                let rise = ((b.cl - a.cl).abs() + (b.cd - a.cd).abs()) / STEP + b.cl.abs() + b.cd;
+                assert!(
+                    rise <= bound,
+                    "{name} {:?} at {} degrees: {rise} past {bound}",
+                    local.mix,
+                    0.1 * f64::from(j)
+                );
+            }
+        }
+    }
+}
