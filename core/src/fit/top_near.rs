@@ -6,6 +6,7 @@
 
 use super::full::Full;
 use super::slipstream::kept_share;
+use super::top_speed::FASTEST_MACH;
 use super::{highest_rpm, power_w, rpm_of};
 use crate::aircraft::thrust_asked_n;
 use crate::job::PitchControl;
@@ -126,7 +127,7 @@ fn to_nothing(&[[a, b], [c, d]]: &Rises, [p, q]: [f64; 2]) -> Option<[f64; 2]> {
 fn sound(rig: &Rig, at: &Condition, loads: &Loads, held: bool, &[[a, b], [c, d]]: &Rises) -> bool {
     let Some(shaft) = &rig.shaft else { return false };
     let (rpm, taken) = (rpm_of(at), power_w(loads, at));
-    let within = at.airspeed_m_s < super::top_speed::FASTEST_MACH * at.air.sound_speed_m_s;
+    let within = at.airspeed_m_s < FASTEST_MACH * at.air.sound_speed_m_s;
     let falls = d < 0.0 && a - b * c / d < 0.0;
     let met = if held {
         taken > 0.0 && taken <= shaft.power_w(rpm, &at.air, 1.0)

@@ -2,11 +2,12 @@
 
 use std::cell::RefCell;
 
-use super::Solver;
 use super::full::Full;
 use super::root::{Search, Wanted};
+use super::settle::STEPS;
 use super::slipstream::kept_share;
 use super::trail::Trail;
+use super::{Solver, rpm_of};
 use crate::aircraft::{speeds, thrust_asked_n};
 use crate::job::Aircraft;
 use crate::result::State;
@@ -22,6 +23,8 @@ const FIRST: f64 = 0.7;
 const FIRST_CLIMBING_M_S: f64 = 1.0;
 /// Fastest speed considered, as a Mach number.
 pub(super) const FASTEST_MACH: f64 = 0.7;
+/// Halvings of a step in which the engine begins to turn the propeller.
+const BISECTIONS: u32 = 10;
 /// Thrust that may be left over, as a share of it.
 const MET_SHARE: f64 = 1e-3;
 
@@ -87,6 +90,10 @@ impl<'r> Chase<'r> {
                 Ok(met) => match self.spare_n(&met) {
                     Some(s) if s >= 0.0 => last = Some(v),
                     _ if last.is_some() => break,
+                    _ if limit == State::EngineCannotTurnIt => {
+                        last = Some(self.first_turned(v / (1.0 + STEP), v)).filter(|low| self.spares(*low));
+                        break;
+                    }
                     _ => limit = State::OutOfReach,
                 },
                 // Too slow for the engine to turn it; the wind of more speed may help.
@@ -100,6 +107,22 @@ impl<'r> Chase<'r> {
             v *= 1.0 + STEP;
         }
         last.map(|low| (low, low * (1.0 + STEP), limit)).ok_or(limit)
+    }
+
+    /// The slowest speed at which the engine turns the propeller, between one at which it does not and one at which it does.
+    fn first_turned(&self, mut slow: f64, mut fast: f64) -> f64 {
+        for _ in 0..BISECTIONS {
+            let middle = 0.5 * (slow + fast);
+            let turned = self.full(middle, &mut Trail::default()).is_ok();
+            (slow, fast) = if turned { (slow, middle) } else { (middle, fast) };
+        }
+        fast
+    }
+
+    /// Whether there is thrust to spare at a speed.
+    fn spares(&self, airspeed_m_s: f64) -> bool {
+        let full = self.full(airspeed_m_s, &mut Trail::default()).ok();
+        full.and_then(|full| self.spare_n(&full)).is_some_and(|spare| spare >= 0.0)
     }
 
     /// How much thrust is short at a speed; where there is no full-throttle condition, some is.
