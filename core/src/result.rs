@@ -14,8 +14,8 @@ mod strength;
 
 pub use crate::job::Figure;
 pub use carved::{
-    Carved, CarvedBlade, CarvedPoint, CarvedStation, Doubt, Known, LoadOf, MassOf, OncePerTurn, PlannedBlade,
-    PlannedStation, Read, RemovalPlan, StaticBalance, StationDeparture,
+    Carved, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, Doubt, Known, LoadOf, MassOf,
+    OncePerTurn, PlannedBlade, PlannedStation, Read, RemovalPlan, StaticBalance, StationDeparture,
 };
 pub use chart::{ChartCell, Cost, ErrorCosts, PitchDiameter, Tolerance};
 pub use fit::{

@@ -389,3 +389,39 @@ proptest! {
         let _: &Rotor = &demo().rotor;
     }
 }
+
+#[test]
+fn nothing_is_cut_where_nothing_was_read() {
+    // Both blades 1.5 degrees coarse: the first read up to station 8, the second not at all.
+    let mut job = carved_by(|_, _| [1.5, 0.0, 0.0]).job.clone();
+    let blades = &mut job.carved.as_mut().unwrap().blades;
+    blades[0].readings.truncate(8);
+    blades[1].readings.clear();
+    let plan = carved::plan(&Rig::new(&job).unwrap(), 2).unwrap();
+    let cut = |b: usize, s: usize| {
+        let p = &plan.blades[b].stations[s];
+        p.face_leading_m + p.face_trailing_m + p.back_m + p.trailing_edge_m
+    };
+    assert!((2..7).all(|s| cut(0, s) > 0.0) && plan.blades[0].stations[..8].iter().all(|s| s.read));
+    assert!((8..11).all(|s| cut(0, s) == 0.0 && !plan.blades[0].stations[s].read));
+    assert!((0..11).all(|s| cut(1, s) == 0.0 && !plan.blades[1].stations[s].note().is_empty()));
+}
+
+#[test]
+fn balance_is_not_known_from_angles_alone() {
+    let mut job = carved_by(|_, _| [0.0; 3]).job.clone();
+    for reading in job.carved.as_mut().unwrap().blades.iter_mut().flat_map(|b| &mut b.readings) {
+        (reading.chord_m, reading.thickness_m) = (None, None);
+    }
+    let balance = carved::analyse(&Rig::new(&job).unwrap()).unwrap().balance;
+    assert!(!balance.read && balance.says().starts_with("not known"), "{}", balance.says());
+}
+
+#[test]
+fn a_blade_carved_thin_is_held_to_its_own_strength() {
+    let least =
+        |off: f64| carved::analyse(&carved_by(|b, _| [0.0, 0.0, b as f64 * off])).unwrap().strength.unwrap();
+    let (drawn, thin) = (least(0.0), least(-2.5));
+    assert!((drawn.margin - drawn.drawn_margin.unwrap()).abs() < 1e-3, "{drawn:?}");
+    assert!(thin.blade == 2 && thin.margin < 0.0 && thin.says().starts_with("Not strong enough"), "{thin:?}");
+}

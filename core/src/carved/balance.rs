@@ -2,13 +2,16 @@
 
 use std::f64::consts::TAU;
 
-use super::CarvedError;
+use super::{CarvedError, Measured};
 use crate::curve::Curve;
 use crate::job::{BladeReading, Carved};
-use crate::result::{MassOf, StaticBalance};
+use crate::result::{Known, MassOf, StaticBalance};
 use crate::rig::Rig;
 use crate::wood::beam::first_moment;
 use crate::wood::{self, BladeBeam};
+
+/// A resultant below this share of what it is made of is rounding.
+const ROUNDING: f64 = 1e-12;
 
 /// The resultant of what each blade contributes in its own direction, evenly spaced round the hub.
 pub(super) fn resultant(of: &[f64]) -> (f64, f64) {
@@ -17,12 +20,21 @@ pub(super) fn resultant(of: &[f64]) -> (f64, f64) {
         let angle = TAU * b as f64 / n;
         (value * angle.cos(), value * angle.sin())
     };
-    of.iter().enumerate().map(turned).fold((0.0, 0.0), |sum, v| (sum.0 + v.0, sum.1 + v.1))
+    let (x, y) = of.iter().enumerate().map(turned).fold((0.0, 0.0), |sum, v| (sum.0 + v.0, sum.1 + v.1));
+    // What rounding leaves of equal blades is nothing.
+    let rounding = ROUNDING * of.iter().map(|v| v.abs()).sum::<f64>();
+    if x.hypot(y) <= rounding { (0.0, 0.0) } else { (x, y) }
 }
 
 /// Static balance of the blades, hub taken as balanced: the mass moment `∫ ρ A r dr` of each from the hub out, by the
 /// outlines of its sections and the density of the readings, else of the job's wood, else of the usual one.
-pub(super) fn balance(rig: &Rig, carved: &Carved, blades: &[Rig]) -> Result<StaticBalance, CarvedError> {
+pub(super) fn balance(
+    rig: &Rig,
+    carved: &Carved,
+    measured: &Measured,
+    blades: &[Rig],
+) -> Result<StaticBalance, CarvedError> {
+    let sized = |known: &[Known]| known.contains(&Known::Measured);
     let usual = wood::material(&rig.job.wood.clone().unwrap_or_default())?.density_kg_m3;
     let density = carved.density_kg_m3.unwrap_or(usual);
     let mass = |blade: &Rig| -> Result<MassOf, CarvedError> {
@@ -41,6 +53,7 @@ pub(super) fn balance(rig: &Rig, carved: &Carved, blades: &[Rig]) -> Result<Stat
     Ok(StaticBalance {
         density_kg_m3: density,
         density_given: carved.density_kg_m3.is_some() || rig.job.wood.is_some(),
+        read: measured.blades.iter().all(|blade| blade.iter().any(|s| sized(&s.known[1..]))),
         blades: masses,
         unbalance_kg_m,
         heavy_blade: (unbalance_kg_m > 1e-9).then_some(heavy + 1),

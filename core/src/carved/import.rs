@@ -144,8 +144,10 @@ pub fn angle_of(text: &str) -> Option<f64> {
     if let Ok(degrees) = text.parse::<f64>() {
         return degrees.is_finite().then_some(degrees);
     }
-    let (whole, minutes) = text.split_once(['°', ':', ' '])?;
-    let (degrees, minutes): (i32, f64) = (whole.trim().parse().ok()?, minutes.trim().parse().ok()?);
-    let sign = if whole.trim().starts_with('-') { -1.0 } else { 1.0 };
-    (0.0..60.0).contains(&minutes).then(|| f64::from(degrees) + sign * minutes / 60.0)
+    // A phone's keys for figures have no space: two points stand for it.
+    let text = text.replace("..", " ");
+    let (sign, text) = text.strip_prefix('-').map_or((1.0, text.as_str()), |rest| (-1.0, rest));
+    let (whole, minutes) = text.split_once(['°', ':', ' ', '-'])?;
+    let (degrees, minutes): (u16, f64) = (whole.trim().parse().ok()?, minutes.trim().parse().ok()?);
+    (0.0..60.0).contains(&minutes).then(|| sign * (f64::from(degrees) + minutes / 60.0))
 }

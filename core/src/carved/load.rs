@@ -6,11 +6,13 @@ use super::{CarvedError, doubts};
 use crate::fit;
 use crate::job::{Carved as Readings, FlightPoint};
 use crate::result::{
-    Carved, CarvedBlade, CarvedPoint, CarvedStation, LoadOf, OncePerTurn, Read, StationDeparture,
+    Carved, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, LoadOf, OncePerTurn, Read,
+    StationDeparture,
 };
 use crate::rig::{Rig, air_of};
 use crate::rotor::{Condition, Rotor};
 use crate::shape::brief;
+use crate::wood::least_margin;
 
 /// The carved blades: differences, loads, balance.
 ///
@@ -28,7 +30,7 @@ pub fn analysed(rig: &Rig, measured: &Measured) -> Result<Carved, CarvedError> {
     let readings = rig.job.carved.as_ref().ok_or(CarvedError::NoReadings)?;
     let set = Set::new(rig, measured)?;
     let rotors: Vec<Rotor> = set.blades.iter().map(|b| b.rotor.clone()).collect();
-    let balance = balance(rig, readings, &set.blades)?;
+    let balance = balance(rig, readings, measured, &set.blades)?;
     let masses = Masses {
         moments_kg_m: balance.blades.iter().map(|m| m.moment_kg_m).collect(),
         ahead_kg_m2: track_moments(rig, readings, &set.blades, balance.density_kg_m3)?,
@@ -41,8 +43,26 @@ pub fn analysed(rig: &Rig, measured: &Measured) -> Result<Carved, CarvedError> {
         blades: blades(rig, readings, measured),
         flight_points: rig.job.flight_points.iter().map(point).collect(),
         balance,
+        strength: strength(rig, &set.blades)?,
         doubts: doubts(rig),
     })
+}
+
+/// The least margin of the blades as they are.
+fn strength(rig: &Rig, blades: &[Rig]) -> Result<Option<CarvedStrength>, CarvedError> {
+    if rig.job.wood.is_none() {
+        return Ok(None);
+    }
+    let drawn_margin = least_margin(rig)?.map(|(_, margin)| margin);
+    let mut least: Option<CarvedStrength> = None;
+    for (b, blade) in blades.iter().enumerate() {
+        if let Some((case, margin)) = least_margin(blade)?
+            && least.as_ref().is_none_or(|l| margin < l.margin)
+        {
+            least = Some(CarvedStrength { blade: b + 1, case, margin, drawn_margin });
+        }
+    }
+    Ok(least)
 }
 
 /// How the blades' masses lie.

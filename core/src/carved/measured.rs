@@ -2,11 +2,11 @@
 
 use crate::curve::Curve;
 use crate::job::{AngleReference, BladeReading, Carved, Propeller, Station};
-use crate::result::Known;
+use crate::result::{Doubt, Known};
 use crate::rig::Rig;
 
 use super::CarvedError;
-use super::doubt::believed;
+use super::doubt::{believed, doubts};
 
 /// A reading this near to a station was taken there, m.
 const AT_STATION_M: f64 = 1e-3;
@@ -50,7 +50,8 @@ impl Measured {
             .collect();
         if !read.contains(&true) {
             let any = given.blades.iter().flat_map(|b| &b.readings).any(tells);
-            return Err(if any { CarvedError::NoneBelieved } else { CarvedError::NoReadings });
+            let why = || doubts(rig).iter().map(Doubt::says).collect();
+            return Err(if any { CarvedError::NoneBelieved(why()) } else { CarvedError::NoReadings });
         }
         let radii_m = radii(rig, carved);
         let own = |b: usize| read[b].then(|| blade(rig, carved, &carved.blades[b].readings, &radii_m));

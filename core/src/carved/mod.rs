@@ -39,9 +39,9 @@ pub enum CarvedError {
     NoReadings,
     /// Readings of which none is believed.
     #[error(
-        "every reading is hard to believe and none is confirmed; doubts tell why: mend them, or confirm those that are right"
+        "every reading is hard to believe and none is confirmed: mend them, or confirm those that are right. {}", .0.join("; ")
     )]
-    NoneBelieved,
+    NoneBelieved(Vec<String>),
     /// A flight point without an answer for the drawn blade.
     #[error("{0} has no answer with the drawn blade; the removals are judged at a flight point that has one")]
     NoAnswer(String),

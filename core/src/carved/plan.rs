@@ -4,7 +4,8 @@
 //! plan leaves, in the balance of that element at the flight point's condition as drawn. Within what planing can reach
 //! ([`super::plane`]) each blade takes the angle of least squares both from the wanted one and from the mean of the
 //! blades; chord and thickness likewise, from the drawn ones. Planing at a thin trailing edge costs chord: where less than the drawn chord would
-//! be left, the turn stops where the angle that is still wrong weighs as much as the chord that is lost. Small differences that no plane would set right are left.
+//! be left, the turn stops where the angle that is still wrong weighs as much as the chord that is lost. Small differences that no plane would set right are left,
+//! and nothing is cut where nothing was read: beyond the outermost readings, and on a blade without any.
 
 use super::CarvedError;
 use super::even::evened;
@@ -14,7 +15,7 @@ use super::plane::{Cuts, Profile, Slab};
 use crate::fit;
 use crate::job::Setting;
 use crate::report::best_of;
-use crate::result::{PlannedBlade, PlannedStation, RemovalPlan};
+use crate::result::{Known, PlannedBlade, PlannedStation, RemovalPlan};
 use crate::rig::{Rig, air_of};
 use crate::rotor::Condition;
 
@@ -187,6 +188,7 @@ impl<'r> Bench<'r> {
             profile: self.profiles[s].as_ref(),
             slab: Slab { face_rad: 0.0, chord_m: size.chord_m, thickness_m: size.thickness_m },
             least: self.least[s],
+            read: size.known.map(|known| matches!(known, Known::Measured | Known::Interpolated)),
         };
         piece.slab.face_rad = size.angle_rad - piece.face_to_chord(&piece.slab);
         piece
@@ -200,6 +202,8 @@ struct Piece<'a> {
     profile: Option<&'a Profile>,
     slab: Slab,
     least: (f64, f64),
+    /// Whether angle, chord and thickness were read here or on both sides of here.
+    read: [bool; 3],
 }
 
 impl Piece<'_> {
@@ -228,8 +232,9 @@ impl Piece<'_> {
         let mut cuts = Cuts::turning(self.slab.chord_m, turn_rad);
         let wedged = self.cut(&cuts);
         let worth = |depth: f64| if depth < LEAST_CUT_M { 0.0 } else { depth };
-        cuts.trailing_edge_m = worth(wedged.chord_m - chord_m);
-        cuts.back_m = worth(wedged.thickness_m - thickness_m);
+        let known = |k: usize, depth: f64| if self.read[k] { worth(depth) } else { 0.0 };
+        cuts.trailing_edge_m = known(1, wedged.chord_m - chord_m);
+        cuts.back_m = known(2, wedged.thickness_m - thickness_m);
         (cuts, self.cut(&cuts))
     }
 
@@ -245,7 +250,7 @@ impl Piece<'_> {
             let left = self.turned(sign * turn);
             left.chord_m >= self.least.0 && left.thickness_m >= self.least.1
         };
-        if self.profile.is_none() || !within(0.0) {
+        if self.profile.is_none() || !self.read[0] || !within(0.0) {
             return 0.0;
         }
         let (mut good, mut bad) = (0.0, WIDEST_RAD);
@@ -311,6 +316,7 @@ impl Piece<'_> {
             chord_m: after.chord_m,
             thickness_m: after.thickness_m,
             has_face: self.profile.is_some(),
+            read: self.read[0],
         }
     }
 }

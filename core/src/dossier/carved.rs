@@ -3,14 +3,15 @@
 use crate::bench::sheet::table::{figures, words};
 use crate::carved::{analyse, plan};
 use crate::result::{
-    Brief, Carved, CarvedBlade, CarvedPoint, CarvedStation, Known, PlannedBlade, PlannedStation, RemovalPlan,
+    Brief, Carved, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, Known, PlannedBlade,
+    PlannedStation, RemovalPlan,
 };
 
 use super::Told;
 use super::chart::{Chart, Curve, MOST_CURVES};
 use super::curves::axis;
 use super::flow::Flow;
-use super::scale::{Scale, Scales, fixed};
+use super::scale::{Scale, Scales};
 use super::verdict;
 
 /// An angle as it is read, of degrees.
@@ -46,6 +47,8 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     let plan = plan(told.rig, told.usual);
     does(flow, &carved, plan.as_ref().ok(), told.scales);
     balance(flow, &carved, told.scales);
+    let after = plan.as_ref().ok().and_then(|plan| plan.after.strength.as_ref());
+    flow.list(&strength(carved.strength.as_ref(), after));
     match plan {
         Ok(plan) => planned(flow, &plan, &length),
         Err(why) => flow.text(&format!("No plan of what to take off: {why}.")),
@@ -138,15 +141,18 @@ fn balance(flow: &mut Flow, carved: &Carved, scales: &Scales) {
     let b = &carved.balance;
     let masses: Vec<String> = b.blades.iter().map(|m| scales.mass.say(m.mass_kg)).collect();
     let usual = if b.density_given { "" } else { ", a usual one" };
-    let side = b.heavy_blade.map_or_else(
-        || "the blades balance".into(),
-        |blade| format!("blade {blade} sinks, as by {} g at the tip", fixed(b.grams_at_tip, 2)),
-    );
     flow.text(&format!(
-        "Static balance by shape at {:.0} kg/m³{usual}: blades outside the hub {}; {side}.",
+        "Static balance by shape at {:.0} kg/m³{usual}: blades outside the hub {}; {}.",
         b.density_kg_m3,
-        masses.join(", ")
+        masses.join(", "),
+        b.says()
     ));
+}
+
+/// Whether the blades hold as carved, and after the cuts.
+fn strength(carved: Option<&CarvedStrength>, after: Option<&CarvedStrength>) -> Vec<String> {
+    let then = after.map(|s| format!("After the cuts below: {}", s.says()));
+    carved.map(CarvedStrength::says).into_iter().chain(then).collect()
 }
 
 fn planned(flow: &mut Flow, plan: &RemovalPlan, length: &Scale) {
@@ -193,7 +199,7 @@ fn planned(flow: &mut Flow, plan: &RemovalPlan, length: &Scale) {
             READ.figure(p.face_angle_deg),
             length.figure(p.chord_m),
             length.figure(p.thickness_m),
-            READ.signed(p.angle_deg - p.wanted_deg),
+            if p.read { READ.signed(p.angle_deg - p.wanted_deg) } else { "not read".into() },
         ]
     };
     let rows =

@@ -2,12 +2,11 @@
 
 use std::cell::RefCell;
 
+use super::Solver;
 use super::full::Full;
 use super::root::{Search, Wanted};
-use super::settle::STEPS;
 use super::slipstream::kept_share;
 use super::trail::Trail;
-use super::{Solver, rpm_of};
 use crate::aircraft::{speeds, thrust_asked_n};
 use crate::job::Aircraft;
 use crate::result::State;

@@ -99,8 +99,18 @@ fn shape_error(e: &serde_path_to_error::Error<serde_json::Error>) -> JobError {
         .join(".");
     JobError::Shape {
         path: if path.is_empty() { "the file".into() } else { path },
-        message: message.to_string(),
+        message: in_words(message),
     }
+}
+
+/// The names of the types in plain words.
+fn in_words(message: &str) -> String {
+    let plain = [
+        ("expected f64", "a number is asked"),
+        ("expected u32", "a whole number is asked"),
+        ("expected a boolean", "true or false is asked"),
+    ];
+    plain.iter().fold(message.to_string(), |text, (name, words)| text.replace(name, words))
 }
 
 /// The JSON Schema of the job file.

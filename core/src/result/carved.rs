@@ -50,8 +50,23 @@ pub struct Carved {
     pub flight_points: Vec<CarvedPoint>,
     /// Static balance.
     pub balance: StaticBalance,
+    /// Whether the carved blades hold; `None` where the job names no wood or no case has an answer.
+    pub strength: Option<CarvedStrength>,
     /// Readings that are hard to believe.
     pub doubts: Vec<Doubt>,
+}
+
+/// The least margin of strength of the carved blades: limit over stress less 1.
+#[derive(Clone, Debug, PartialEq, Serialize)]
+pub struct CarvedStrength {
+    /// The blade with the least, from 1.
+    pub blade: usize,
+    /// The case in which it has it.
+    pub case: String,
+    /// Its margin.
+    pub margin: f64,
+    /// That of the blade as drawn.
+    pub drawn_margin: Option<f64>,
 }
 
 /// One carved blade.
@@ -156,6 +171,9 @@ pub struct StaticBalance {
     pub density_kg_m3: f64,
     /// Whether the job gives it; otherwise it is a usual one.
     pub density_given: bool,
+    /// Whether chord or thickness was read on every blade. Otherwise the masses are those of the drawing or of other
+    /// blades, and the balance tells nothing of the wood.
+    pub read: bool,
     /// Each blade.
     pub blades: Vec<MassOf>,
     /// Unbalance, kg m.
@@ -164,6 +182,48 @@ pub struct StaticBalance {
     pub heavy_blade: Option<usize>,
     /// The same as a mass at the tip, g.
     pub grams_at_tip: f64,
+}
+
+impl StaticBalance {
+    /// Which blade sinks, in a few words.
+    #[must_use]
+    pub fn says(&self) -> String {
+        match self.heavy_blade {
+            _ if !self.read => {
+                "not known, for neither chord nor thickness was read on every blade; hang it up".into()
+            }
+            Some(blade) if self.grams_at_tip >= LEAST_GRAMS => {
+                format!("blade {blade} sinks, as by {:.2} g at the tip", self.grams_at_tip)
+            }
+            _ => "by the readings it hangs level".into(),
+        }
+    }
+}
+
+/// What is nothing to a balance, g.
+const LEAST_GRAMS: f64 = 0.005;
+
+impl CarvedStrength {
+    /// Whether it holds, in a sentence.
+    #[must_use]
+    pub fn says(&self) -> String {
+        let drawn = self.drawn_margin.map_or_else(String::new, |m| format!("; {:.0} % as drawn", 100.0 * m));
+        if self.margin < 0.0 {
+            format!(
+                "Not strong enough: blade {} carries {:.0} % too much in the case {}{drawn}. Do not run it.",
+                self.blade,
+                100.0 * (1.0 / (1.0 + self.margin) - 1.0),
+                self.case
+            )
+        } else {
+            format!(
+                "Strength in hand by its measured sizes: {:.0} %, blade {} in the case {}{drawn}.",
+                100.0 * self.margin,
+                self.blade,
+                self.case
+            )
+        }
+    }
 }
 
 /// Mass of one blade outside the hub.
@@ -239,4 +299,26 @@ pub struct PlannedStation {
     pub thickness_m: f64,
     /// Whether there is a flat face to plane.
     pub has_face: bool,
+    /// Whether the blade's angle was read here or on both sides of here. Where it was not, nothing is cut.
+    pub read: bool,
+}
+
+impl PlannedStation {
+    /// What keeps it from being put right, in a few words; empty where nothing does.
+    #[must_use]
+    pub fn note(&self) -> &'static str {
+        match (self.read, self.has_face) {
+            (false, _) => "not read here: not turned",
+            (true, false) => "no flat face: not turned",
+            (true, true) => "",
+        }
+    }
+}
+
+impl Doubt {
+    /// Where it is and what it is about.
+    #[must_use]
+    pub fn says(&self) -> String {
+        format!("blade {}, {:.1} mm: {}", self.blade, 1e3 * self.radius_m, self.message)
+    }
 }

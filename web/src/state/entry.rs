@@ -6,7 +6,7 @@ use spokeshave::carved::angle_of;
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{Job, Problem};
 
-use super::{BladeFigure, EngineFigure, Field, Measure};
+use super::{EngineFigure, Field, Measure};
 use crate::number;
 use crate::units::{Quantity, Units};
 
@@ -59,7 +59,7 @@ pub fn tried(
         return Ok(without);
     }
     let quantity = field.quantity(job);
-    let minutes = matches!(field, Field::Reading(.., BladeFigure::Angle)).then(|| angle_of(text)).flatten();
+    let minutes = (quantity == Quantity::Angle).then(|| angle_of(text)).flatten();
     let typed = minutes.map_or_else(|| number::read(units, quantity, text), Ok);
     let value = typed.map_err(|why| {
         let example = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));

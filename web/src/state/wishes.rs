@@ -52,7 +52,9 @@ impl LimitFigure {
             Self::Clearance => ("ground clearance", "ground_clearance_m", Quantity::Length),
             Self::BlankWidth => ("width of the blank", "blank_width_most_m", Quantity::Length),
             Self::BlankDepth => ("thickness of the blank", "blank_depth_most_m", Quantity::Length),
-            Self::StressMargin => ("least stress margin", "stress_margin_least", Quantity::Coefficient),
+            Self::StressMargin => {
+                ("least stress margin, 0.1 for 10 %", "stress_margin_least", Quantity::Coefficient)
+            }
         }
     }
 

@@ -3,7 +3,7 @@
 use std::rc::Rc;
 
 use spokeshave::result::{
-    Brief, CarvedBlade, CarvedPoint, CarvedStation, Known, OncePerTurn, Read, StaticBalance,
+    Brief, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, Known, OncePerTurn, Read,
 };
 use yew::prelude::*;
 
@@ -50,7 +50,7 @@ fn differences(blade: &CarvedBlade, units: Units) -> Html {
 }
 
 fn difference(s: &CarvedStation, units: Units) -> Html {
-    let length = |v: f64| figure(units, Quantity::Length, Some(v));
+    let length = |v: f64| fine(units, v);
     let by = |v: f64| signed(units.shown(Quantity::Length, v), units.decimals(Quantity::Length).max(1));
     let class = |r: &Read| (r.known != Known::Measured).then_some("guessed");
     let title = |r: &Read| r.known.words();
@@ -68,6 +68,11 @@ fn difference(s: &CarvedStation, units: Units) -> Html {
             { cell(&s.thickness_m, by(s.thickness_m.from_drawn)) }
         </tr>
     }
+}
+
+/// A length as a calliper reads it.
+pub(super) fn fine(units: Units, si: f64) -> String {
+    fixed(units.shown(Quantity::Length, si), units.decimals(Quantity::Length).max(1))
 }
 
 /// The flight points as drawn, as carved and after the plan.
@@ -139,16 +144,12 @@ fn brief_row(
 #[component]
 pub(super) fn Balance(props: &FoundProps) -> Html {
     let b = &props.found.carved.balance;
-    let side = |b: &StaticBalance| match b.heavy_blade {
-        Some(blade) => format!("blade {blade} sinks, as by {}\u{a0}g at the tip", fixed(b.grams_at_tip, 2)),
-        None => "it hangs level".into(),
-    };
     let masses: Vec<String> =
         b.blades.iter().map(|m| with_unit(props.units, Quantity::Mass, Some(m.mass_kg))).collect();
     let density = if b.density_given { "" } else { ", the usual wood's, for the job names none" };
     let then = props.found.plan.as_ref().map_or_else(
         |_| String::new(),
-        |plan| format!(" After the cuts below {}.", side(&plan.after.balance)),
+        |plan| format!(" After the cuts below {}.", plan.after.balance.says()),
     );
     html! {
         <p>
@@ -157,8 +158,23 @@ pub(super) fn Balance(props: &FoundProps) -> Html {
                 "by shape at {}\u{a0}kg/m³{density}: {} outside the hub; {}.{then}",
                 fixed(b.density_kg_m3, 0),
                 masses.join(" and "),
-                side(b)
+                b.says()
             ) }
         </p>
+    }
+}
+
+/// Whether the blades hold as carved and after the cuts.
+#[component]
+pub(super) fn Holds(props: &FoundProps) -> Html {
+    let after = props.found.plan.as_ref().ok().and_then(|plan| plan.after.strength.as_ref());
+    let line = |before: &'static str, s: &CarvedStrength| {
+        html! { <p class={(s.margin < 0.0).then_some("warning")}>{ before }{ s.says() }</p> }
+    };
+    html! {
+        <>
+            { for props.found.carved.strength.iter().map(|s| line("", s)) }
+            { for after.iter().map(|s| line("After the cuts below: ", s)) }
+        </>
     }
 }

@@ -18,7 +18,7 @@ use crate::number::fixed;
 use crate::results::CarvedFound;
 use crate::state::{Action, CarvedChoice, Choice, Running, State};
 use entry::BladeEntry;
-use found::{Balance, Differences, Points};
+use found::{Balance, Differences, Holds, Points};
 use sheet::ReadingsSheet;
 use take_off::TakeOffSheet;
 
@@ -56,16 +56,15 @@ pub fn in_a_line(state: &State, found: Option<&Result<CarvedFound, String>>) -> 
     let stations = found.carved.blades.iter().flat_map(|b| &b.stations);
     let worst = stations.map(|s| s.angle_deg.from_drawn.abs()).fold(0.0, f64::max);
     let b = &found.carved.balance;
-    let balance = match b.heavy_blade {
-        Some(blade) if b.grams_at_tip >= 0.005 => {
-            format!("blade {blade} sinks, as by {}\u{a0}g at the tip", fixed(b.grams_at_tip, 2))
-        }
-        _ => "the blades balance".into(),
+    let balance = format!("balance: {}", b.says());
+    let strength = match &found.carved.strength {
+        Some(s) if s.margin < 0.0 => "; not strong enough",
+        _ => "",
     };
     let left_out = found.carved.doubts.iter().filter(|d| !d.counted).count();
     let doubted =
         if left_out > 0 { format!("; hard to believe and left out: {left_out}") } else { String::new() };
-    format!("{count}; up to {}° from the drawing; {balance}{doubted}", fixed(worst, 1))
+    format!("{count}; up to {}° from the drawing; {balance}{strength}{doubted}", fixed(worst, 1))
 }
 
 /// What a choice about the blades does.
@@ -90,7 +89,7 @@ pub fn CarvedPanel(props: &CarvedPanelProps) -> Html {
         <div class="carved">
             <p class="note">
                 { "Type what the protractor and the callipers read; leave empty what was not measured. Enter goes down the column. \
-                   An angle may be in decimals or in degrees and minutes, 18 30. Between readings the difference from the drawing is interpolated." }
+                   An angle may be in decimals or in degrees and minutes, 18 30 or 18..30. Between readings the difference from the drawing is interpolated." }
             </p>
             <div class="settings unprinted">
                 <Pick label="Angles read" options={vec!["on the flat face".into(), "to the chord line".into()]}
@@ -120,6 +119,7 @@ fn results(props: &CarvedPanelProps) -> Html {
             <Differences found={found.clone()} {units} />
             <Points found={found.clone()} {units} />
             <Balance found={found.clone()} {units} />
+            <Holds found={found.clone()} {units} />
             <TakeOffSheet {found} {units} />
         </>
     }

@@ -57,5 +57,5 @@ fn read(state: &State, text: &str) -> Result<(Carved, String), String> {
         import::read(text, &job.propeller, job.carved.as_ref()).map_err(|e| e.to_string())?;
     let count: usize = carved.blades.iter().map(|b| b.readings.len()).sum();
     let unused = if unused.is_empty() { String::new() } else { format!(" Not used: {}.", unused.join(", ")) };
-    Ok((carved, format!("{count} readings were taken over.{unused}")))
+    Ok((carved, format!("Readings taken over: {count}.{unused}")))
 }

@@ -3,7 +3,7 @@
 use spokeshave::result::{PlannedBlade, PlannedStation, RemovalPlan};
 use yew::prelude::*;
 
-use super::found::FoundProps;
+use super::found::{FoundProps, fine};
 use crate::number::{figure, fixed, fixed_or_none, signed};
 use crate::units::{Quantity, Units};
 
@@ -16,9 +16,9 @@ pub(super) fn TakeOffSheet(props: &FoundProps) -> Html {
             <>
                 <h3>{ format!("What to take off, for the departure as drawn at {}", plan.flight_point) }</h3>
                 <p class="note">
-                    { "Depths off the flat face at the leading or the trailing edge fall to nothing at the other edge; off the back at the thickest \
-                       place, fading to the edges; then off the trailing edge. Wood only comes off: what stays wrong is in the last column. \
-                       Cut less than it says, measure again, and stop at the least thickness that holds." }
+                    { "The face is the flat, rear side, the back the cambered, forward one. Depths off the face at the leading or the trailing edge fall to \
+                       nothing at the other edge; off the back at the thickest place, fading to the edges; then off the trailing edge. Wood \
+                       only comes off: what stays wrong is in the last column, and nothing is cut where nothing was read. Cut less than it says, and measure again." }
                 </p>
                 <div class="duo">{ for plan.blades.iter().map(|b| table(plan, b, props.units)) }</div>
             </>
@@ -38,13 +38,13 @@ fn table(plan: &RemovalPlan, blade: &PlannedBlade, units: Units) -> Html {
                 <caption>{ name }</caption>
                 <thead><tr>
                     <th scope="col">{ "r" }<small>{ mm }</small></th>
-                    <th scope="col">{ "Face at LE" }<small>{ mm }</small></th>
-                    <th scope="col">{ "Face at TE" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Face, leading edge" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Face, trailing edge" }<small>{ mm }</small></th>
                     <th scope="col">{ "Back" }<small>{ mm }</small></th>
-                    <th scope="col">{ "TE edge" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Trailing edge" }<small>{ mm }</small></th>
                     <th scope="col">{ "Then face" }<small>{ "deg" }</small></th>
-                    <th scope="col">{ "Chord" }<small>{ mm }</small></th>
-                    <th scope="col">{ "Thick" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Then chord" }<small>{ mm }</small></th>
+                    <th scope="col">{ "Then thick" }<small>{ mm }</small></th>
                     <th scope="col">{ "Left from drawn" }<small>{ "deg" }</small></th>
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
@@ -54,19 +54,19 @@ fn table(plan: &RemovalPlan, blade: &PlannedBlade, units: Units) -> Html {
 }
 
 fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
-    let length = |v: f64| figure(units, Quantity::Length, Some(v));
+    let decimals = units.decimals(Quantity::Length) + 1;
     let depth = |v: f64| {
-        let text = if v > 0.0 { fixed(units.shown(Quantity::Length, v), 2) } else { "·".into() };
-        html! { <td class={classes!((v > 0.0).then_some("cut"))}>{ text }</td> }
+        let text = if v > 0.0 { fixed(units.shown(Quantity::Length, v), decimals) } else { "·".into() };
+        html! { <td class={classes!((v > 0.0).then_some("depth"))}>{ text }</td> }
     };
     html! {
-        <tr>
-            <th scope="row">{ length(s.radius_m) }</th>
+        <tr class={classes!((!s.read).then_some("guessed"))}>
+            <th scope="row">{ figure(units, Quantity::Length, Some(s.radius_m)) }</th>
             { depth(s.face_leading_m) }{ depth(s.face_trailing_m) }{ depth(s.back_m) }{ depth(s.trailing_edge_m) }
             <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
-            <td>{ length(s.chord_m) }</td>
-            <td>{ length(s.thickness_m) }</td>
-            <td>{ left_deg.map(|d| signed(d, 2)) }</td>
+            <td>{ fine(units, s.chord_m) }</td>
+            <td>{ fine(units, s.thickness_m) }</td>
+            <td>{ left_deg.map(|d| signed(d, 2)) }<small>{ s.note() }</small></td>
         </tr>
     }
 }

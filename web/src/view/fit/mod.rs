@@ -66,7 +66,10 @@ pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
         .standing
         .as_ref()
         .map(|s| format!("{} standing still", with_unit(state.units, Quantity::Rpm, Some(s.rpm))));
-    [top, climb, standing].into_iter().flatten().collect::<Vec<_>>().join("; ")
+    let air =
+        state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
+    let told = [top, climb, standing].into_iter().flatten().collect::<Vec<_>>().join("; ");
+    if told.is_empty() { told } else { format!("{told}; all{air}") }
 }
 
 /// Figures that decide, charts over one airspeed axis, a sentence for each limit.

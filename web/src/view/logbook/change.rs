@@ -1,7 +1,10 @@
 //! What to change for a wanted rpm or speed.
 
 use spokeshave::change::{Wanted, changes};
-use spokeshave::result::{Change, Figure, Means};
+use std::rc::Rc;
+
+use spokeshave::result::{Change, Figure, Logged, Means};
+use spokeshave::rig::Rig;
 use yew::prelude::*;
 
 use super::lines::points;
@@ -17,6 +20,8 @@ use crate::view::sections::boxes::Line;
 pub(super) struct ChangeFormProps {
     pub(super) state: Seen,
     pub(super) rig: Option<RigRef>,
+    /// What the readings tell, which the answer uses.
+    pub(super) logged: Option<Rc<Result<Logged, String>>>,
 }
 
 /// What was asked and what came of it.
@@ -54,8 +59,10 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
     };
     let ask = {
         let (asked, now, rig, units) = (asked.clone(), now.clone(), props.rig.clone(), props.state.units);
+        let logged = props.logged.clone();
         Callback::from(move |_: MouseEvent| {
-            let answer = rig.as_ref().map(|rig| answered(rig, &now, units));
+            let found = logged.as_deref().and_then(|logged| logged.as_ref().ok());
+            let answer = rig.as_ref().map(|rig| answered(rig, found, &now, units));
             asked.set(Asked { answer, ..now.clone() });
         })
     };
@@ -73,6 +80,9 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
                 <button type="button" class="act" onclick={ask}>{ "Work out the changes" }</button>
             </div>
             if let Some(Ok(changes)) = &now.answer {
+                if props.logged.as_deref().is_some_and(Result::is_ok) {
+                    <p class="note">{ "Worked out with the factors that the readings tell, kept or not." }</p>
+                }
                 { for changes.iter().map(|c| told(c, now.speed, props.state.units)) }
             }
         </div>
@@ -83,10 +93,19 @@ fn quantity(speed: bool) -> Quantity {
     if speed { Quantity::Speed } else { Quantity::Rpm }
 }
 
-fn answered(rig: &RigRef, asked: &Asked, units: Units) -> Result<Vec<Change>, String> {
+/// The changes, with the factors that the readings tell where there are any.
+fn answered(
+    rig: &RigRef,
+    logged: Option<&Logged>,
+    asked: &Asked,
+    units: Units,
+) -> Result<Vec<Change>, String> {
     let value = read(units, quantity(asked.speed), &asked.text).map_err(|why| format!("Wanted: {why}."))?;
     let figure = if asked.speed { Figure::AirspeedMS } else { Figure::Rpm };
-    changes(&rig.0, &Wanted { point: asked.point, figure, value }).map_err(|e| e.to_string())
+    let known = logged.map(|logged| Rig::with_factors(&rig.0.job, &logged.estimate.factors)).transpose();
+    let known = known.map_err(|e| e.to_string())?;
+    let wanted = Wanted { point: asked.point, figure, value };
+    changes(known.as_ref().unwrap_or(&rig.0), &wanted).map_err(|e| e.to_string())
 }
 
 fn told(c: &Change, speed: bool, units: Units) -> Html {
@@ -111,7 +130,7 @@ fn told(c: &Change, speed: bool, units: Units) -> Html {
     let reached = match (c.reached, c.had) {
         (true, _) => String::new(),
         (false, Some(had)) => {
-            format!(" Not reached: {} at most.", with_unit(units, quantity(speed), Some(had)))
+            format!(" Not reached: {} is the nearest.", with_unit(units, quantity(speed), Some(had)))
         }
         (false, None) => format!(" Not reached. {}", c.state.sentence()),
     };

@@ -78,7 +78,7 @@ pub fn LogbookPanel(props: &LogbookPanelProps) -> Html {
             <Readings state={state.clone()} />
             <LogSheet state={state.clone()} />
             if !empty { { told(&act, props) } }
-            <ChangeForm state={state.clone()} rig={props.rig.clone()} />
+            <ChangeForm state={state.clone()} rig={props.rig.clone()} logged={props.logged.clone()} />
         </div>
     }
 }

@@ -30,7 +30,7 @@ pub(super) fn LogSheet(props: &LogSheetProps) -> Html {
             let (logbook, unused) = import::read(&text, before).map_err(|e| e.to_string())?;
             let unused =
                 if unused.is_empty() { String::new() } else { format!(" Not used: {}.", unused.join(", ")) };
-            let said = format!("{} readings were taken over.{unused}", logbook.readings.len());
+            let said = format!("Readings taken over: {}.{unused}", logbook.readings.len());
             choose(&act, |logbook: Logbook| LogbookChoice::Readings(Box::new(logbook))).emit(logbook);
             Ok(said)
         })

@@ -119,7 +119,7 @@ pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
 
 /// Whether errors change a figure at all: in level flight the drag gives the thrust.
 fn moves(cost: &Cost) -> bool {
-    cost.bands[1] > 1e-6 * cost.drawn.abs().max(1e-3)
+    cost.bands[1] > 1e-6 * cost.drawn.abs().max(1.0)
 }
 
 /// The station at which a degree costs most.

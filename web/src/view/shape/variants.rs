@@ -5,11 +5,12 @@ use std::rc::Rc;
 use spokeshave::job::{Aim, Figure, Job};
 use spokeshave::rig::Rig;
 use spokeshave::shape::{Wish, figure_at};
+use spokeshave::wood::least_margin;
 use yew::prelude::*;
 
 use super::figures::{better, name, told};
 use crate::app::{RigRef, Same};
-use crate::number::{signed, with_unit};
+use crate::number::{NO_FIGURE, fixed, signed, with_unit};
 use crate::state::{Action, Beside, Variant};
 use crate::units::{Quantity, Units};
 use crate::view::{Seen, use_act};
@@ -26,6 +27,8 @@ struct Row {
     diameter_m: f64,
     pitch_m: f64,
     figures: Vec<Option<f64>>,
+    /// Least margin of strength, where the job names its wood.
+    margin: Option<f64>,
 }
 
 impl Row {
@@ -38,6 +41,12 @@ impl Row {
             diameter_m: rig.job.propeller.diameter_m,
             pitch_m: rig.rotor.blade.pitch_075_m(0.0),
             figures: aims.iter().map(at).collect(),
+            margin: rig
+                .job
+                .wood
+                .as_ref()
+                .and_then(|_| least_margin(rig).ok().flatten())
+                .map(|(_, margin)| margin),
         }
     }
 }
@@ -67,6 +76,7 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
             <table class="sheet-table blades">
                 <thead><tr>
                     <th scope="col">{ "Blade" }</th><th scope="col">{ "Diameter" }</th><th scope="col">{ "Pitch" }</th>
+                    <th scope="col">{ "Strength in hand" }<small>{ "of the wood named" }</small></th>
                     { for heads }<th scope="col"><span class="unseen">{ "What to do" }</span></th>
                 </tr></thead>
                 <tbody>
@@ -92,8 +102,19 @@ fn figures(row: &Row, aims: &[Aim], drawn: Option<&[Option<f64>]>, units: Units)
     html! {
         <>
             <td>{ length(row.diameter_m) }</td><td>{ length(row.pitch_m) }</td>
+            <td class={row.margin.is_some_and(|m| m < 0.0).then_some("broken")}>{ strength(row.margin) }</td>
             { for aims.iter().zip(&row.figures).enumerate().map(cell) }
         </>
+    }
+}
+
+fn strength(margin: Option<f64>) -> String {
+    match margin {
+        Some(m) if m < 0.0 => {
+            format!("not strong enough: stress × {} of the limit", fixed(1.0 / (1.0 + m), 2))
+        }
+        Some(m) => format!("{}\u{a0}%", fixed(100.0 * m, 0)),
+        None => NO_FIGURE.into(),
     }
 }
 
@@ -121,7 +142,7 @@ fn BladeRow(props: &BladeRowProps) -> Html {
             <th scope="row">{ name }</th>
             { match &*row {
                 Some(row) => figures(row, &props.aims, Some(&props.drawn), props.units),
-                None => html! { <td colspan={(props.aims.len() + 2).to_string()}>{ "not allowed in the job as it stands now" }</td> },
+                None => html! { <td colspan={(props.aims.len() + 3).to_string()}>{ "not allowed in the job as it stands now" }</td> },
             } }
             <td><div class="row-acts">
                 <button type="button" class="act" aria-pressed={if compared { "true" } else { "false" }} aria-label={format!("Compare {name}")}

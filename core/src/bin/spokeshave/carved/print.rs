@@ -1,7 +1,7 @@
 //! Tables of the carved blades and of what to take off.
 
 use spokeshave::result::{
-    Carved, CarvedBlade, CarvedPoint, CarvedStation, Known, PlannedStation, RemovalPlan,
+    Carved, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, Known, PlannedStation, RemovalPlan,
 };
 
 use crate::briefs::briefs;
@@ -78,6 +78,9 @@ pub(super) fn text(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
     parts.push(points(carved, plan));
     parts.push(shaking(carved));
     parts.push(balance(carved, plan));
+    parts.extend(carved.strength.as_ref().map(CarvedStrength::says));
+    let after = plan.and_then(|plan| plan.after.strength.as_ref());
+    parts.extend(after.map(|s| format!("After the plan: {}", s.says())));
     parts.extend(plan.map(sheet));
     parts.join("\n\n")
 }
@@ -145,16 +148,12 @@ fn balance(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
     let b = &carved.balance;
     let grams: Vec<String> = b.blades.iter().map(|m| figure(Some(1e3 * m.mass_kg), 1)).collect();
     let given = if b.density_given { "" } else { ", a usual one: none is given" };
-    let side = |b: &spokeshave::result::StaticBalance| match b.heavy_blade {
-        Some(blade) => format!("blade {blade} sinks, as by {} g at the tip", figure(Some(b.grams_at_tip), 2)),
-        None => "level".into(),
-    };
-    let then = plan.map_or_else(String::new, |p| format!("; after the plan {}", side(&p.after.balance)));
+    let then = plan.map_or_else(String::new, |p| format!("; after the plan {}", p.after.balance.says()));
     format!(
         "Static balance by shape at {} kg/m³{given}: blades outside the hub {} g; {}{then}",
         figure(Some(b.density_kg_m3), 0),
         grams.join(", "),
-        side(b)
+        b.says()
     )
 }
 
@@ -185,7 +184,7 @@ fn sheet(plan: &RemovalPlan) -> String {
             figure(Some(1e3 * p.thickness_m), 1),
             format!("{} to {}", figure(Some(p.reachable_deg.0), 1), figure(Some(p.reachable_deg.1), 1)),
             signed(Some(p.angle_deg - p.wanted_deg), 2),
-            if p.has_face { "" } else { "no flat face: not turned" }.into(),
+            p.note().into(),
         ]
     };
     let rows =

@@ -103,7 +103,7 @@ pub(super) fn changes(rig: &Rig, wanted: &Wanted, changes: &[Change]) -> String 
         };
         let reached = match (c.reached, c.had) {
             (true, _) => String::new(),
-            (false, Some(had)) => format!("; not reached: {} at most", value(had)),
+            (false, Some(had)) => format!("; not reached: {} is the nearest", value(had)),
             (false, None) => format!("; not reached: {}", c.state.sentence()),
         };
         let rows = c.flight_points.iter().flat_map(|p| [(&p.drawn, "now"), (&p.shaped, "changed")]);
