@@ -1,10 +1,8 @@
 //! The blade in wood: the solid is closed, the paper tells what the solid has, and what cannot be made is said.
 
-mod paper;
-
 use std::collections::{HashMap, HashSet};
 
-use paper::words_apart;
+use crate::paper::words_apart;
 use spokeshave::bench::{
     Bench, BenchError, Fault, Paper, Side, Solid, Unit, files, sheet_files, template_card,
 };

@@ -1,9 +1,7 @@
 //! The command line as a script meets it: output, exit codes, messages.
 #![cfg(feature = "cli")]
 
-mod command;
-
-use command::{err, out, run};
+use crate::command::{err, out, run};
 use serde_json::Value;
 use spokeshave::job::{DEMOS, Job};
 use spokeshave::rig::Rig;

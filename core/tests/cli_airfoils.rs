@@ -1,9 +1,7 @@
 //! The tables that come with the program against what the solver computes today.
 #![cfg(feature = "cli")]
 
-mod command;
-
-use command::{err, out, run};
+use crate::command::{err, out, run};
 
 const FOLDER: &str = concat!(env!("CARGO_MANIFEST_DIR"), "/../airfoils");
 

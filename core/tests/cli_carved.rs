@@ -1,9 +1,7 @@
 //! `spokeshave carved` as a script meets it.
 #![cfg(feature = "cli")]
 
-mod command;
-
-use command::{err, out, run};
+use crate::command::{err, out, run};
 use serde_json::Value;
 use spokeshave::job::Job;
 

@@ -1,9 +1,7 @@
 //! `spokeshave fit` and `--vary` as a script meets them.
 #![cfg(feature = "cli")]
 
-mod command;
-
-use command::{err, out, run};
+use crate::command::{err, out, run};
 use serde_json::Value;
 
 const DEMO: &str = "light-aeroplane";

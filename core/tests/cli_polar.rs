@@ -1,9 +1,7 @@
 //! `polar` and `import` as a script meets them.
 #![cfg(feature = "cli")]
 
-mod command;
-
-use command::{err, out, run};
+use crate::command::{err, out, run};
 use serde_json::{Value, json};
 use spokeshave::job::{DEMOS, Job};
 use spokeshave::section::outline::clark_y;

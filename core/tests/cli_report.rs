@@ -1,9 +1,7 @@
 //! `spokeshave report` as a script meets it.
 #![cfg(feature = "cli")]
 
-mod command;
-
-use command::{err, out, run};
+use crate::command::{err, out, run};
 
 #[test]
 fn one_file_is_written_and_its_pages_are_told() {

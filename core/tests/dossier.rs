@@ -1,8 +1,6 @@
 //! The report of a job: its parts are there, its words apart, and what a job lacks is left out.
 
-mod paper;
-
-use paper::words_apart;
+use crate::paper::words_apart;
 use spokeshave::bench::{Item, Paper, Sheet, pdf};
 use spokeshave::carved;
 use spokeshave::dossier::{Scales, dossier};

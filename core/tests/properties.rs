@@ -1,8 +1,6 @@
 //! What must hold for any valid job: no panic, every figure finite, and the laws that no propeller escapes.
 
-mod any_job;
-
-use any_job::jobs;
+use crate::any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::fit::Along;

@@ -1,9 +1,7 @@
 //! What must hold of the fit for any valid job: no panic, every figure finite, no jump but where a limit or a stop is
 //! met.
 
-mod any_job;
-
-use any_job::jobs;
+use crate::any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::fit::{envelope, pitch_worth};

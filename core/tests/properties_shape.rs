@@ -1,10 +1,8 @@
 //! What must hold of shaping for any valid job: an answer in finite figures within its limits, or a refusal in words.
 
-mod any_job;
-
 use std::ops::ControlFlow;
 
-use any_job::jobs;
+use crate::any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::job::Limits;

@@ -1,8 +1,6 @@
 //! What must hold of the strength of a blade.
 
-mod any_job;
-
-use any_job::jobs;
+use crate::any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::job::{DEMOS, Engine, Hub, Job, LinePoint, Making, OwnMaterial, Species, StressLimits, Wood};

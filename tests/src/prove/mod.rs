@@ -8,7 +8,7 @@ pub(crate) use report::Report;
 
 use anyhow::Result;
 use spokeshave_press::{Source, Workspace, build_page, run};
-use std::process::Command;
+use std::time::{Duration, Instant};
 
 /// Sets up, then runs every check; a failing one does not keep the others from running.
 ///
@@ -25,11 +25,18 @@ pub(crate) fn everything() -> Result<Report> {
             &["clippy", "--release", "--workspace", "--all-targets", "--", "--deny", "warnings"],
         )
     });
-    let page = report.check("the page builds", || build_page(&workspace, Source::Any));
+    // Side by side: linking the page as a whole keeps one core busy, compiling the tests the others.
+    let (page, compiled) = std::thread::scope(|scope| {
+        let page = scope.spawn(|| timed(|| build_page(&workspace, Source::Any)));
+        let compiled = timed(|| test_run::compile(&workspace));
+        (page.join(), compiled)
+    });
+    let page = page.map_err(|_| anyhow::anyhow!("the build of the page came to a sudden end"))?;
+    report.done("the tests compile", compiled);
+    let page = report.done("the page builds", page);
     if let Some(page) = &page {
         println!("{}: {} bytes", page.path.display(), page.bytes);
     }
-    report.check("lints of the page", || page_lints(&workspace));
     let page = page.map(|page| page.path);
     let tests = report.check("tests", || test_run::all(&workspace, page.as_deref()));
     report.tests(tests.flatten());
@@ -40,14 +47,8 @@ fn cargo(workspace: &Workspace, arguments: &[&str]) -> Result<()> {
     run(workspace.cargo().args(arguments))
 }
 
-/// Lints the page as it is compiled for the browser, where the installed compiler can do that.
-fn page_lints(workspace: &Workspace) -> Result<()> {
-    let target = ["--target", "wasm32-unknown-unknown"];
-    let library = Command::new("rustc").args(["--print", "target-libdir"]).args(target).output()?;
-    if !std::path::Path::new(String::from_utf8_lossy(&library.stdout).trim()).is_dir() {
-        println!("left out: the lints come with the installed compiler, which has no wasm32 target here");
-        return Ok(());
-    }
-    let page = ["clippy", "--profile", "page", "--package", "spokeshave-web"];
-    run(workspace.cargo().args(page).args(target).args(["--", "--deny", "warnings"]))
+/// What some work gives and how long it takes.
+fn timed<T>(work: impl FnOnce() -> Result<T>) -> (Result<T>, Duration) {
+    let begun = Instant::now();
+    (work(), begun.elapsed())
 }

@@ -32,11 +32,16 @@ impl Report {
         println!("\n== {name}");
         let begun = Instant::now();
         let result = check();
+        self.done(name, (result, begun.elapsed()))
+    }
+
+    /// Notes what came of a check that has been run and gives its result if it passed.
+    pub(crate) fn done<T>(&mut self, name: &'static str, (result, took): (Result<T>, Duration)) -> Option<T> {
         let error = result.as_ref().err().map(|error| format!("{error:#}"));
         if let Some(error) = &error {
-            println!("{error}");
+            println!("{name}: {error}");
         }
-        self.steps.push(Step { name, took: begun.elapsed(), error });
+        self.steps.push(Step { name, took, error });
         result.ok()
     }
 

@@ -2,19 +2,25 @@
 
 use super::report::Tests;
 use anyhow::Result;
-use spokeshave_press::Workspace;
+use spokeshave_press::{Workspace, run};
 use std::io::{BufRead, BufReader};
 use std::path::Path;
 use std::process::Stdio;
 
+const TESTS: [&str; 3] = ["test", "--release", "--workspace"];
 /// Where the random jobs of the property tests begin, unless the environment says otherwise: the same run twice
 /// has the same outcome.
 const SEED: (&str, &str) = ("PROPTEST_RNG_SEED", "1");
 
+/// Compiles the tests of all crates.
+pub(crate) fn compile(workspace: &Workspace) -> Result<()> {
+    run(workspace.cargo().args(TESTS).arg("--no-run"))
+}
+
 /// Runs the tests of all crates, showing what they print; gives their count.
 pub(crate) fn all(workspace: &Workspace, page: Option<&Path>) -> Result<Option<Tests>> {
     let mut cargo = workspace.cargo();
-    cargo.args(["test", "--release", "--workspace", "--no-fail-fast"]).stdout(Stdio::piped());
+    cargo.args(TESTS).arg("--no-fail-fast").stdout(Stdio::piped());
     if let Some(page) = page {
         cargo.env("SPOKESHAVE_PAGE", page);
     }

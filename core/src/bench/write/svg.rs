@@ -108,6 +108,7 @@ fn radius(item: &Item) -> f64 {
     if let Item::Circle { radius_mm, .. } = item { *radius_mm } else { 0.0 }
 }
 
+/// As wide as was reckoned with, whatever font the reader has.
 fn words(out: &mut String, text: &Text, [x, y]: [f64; 2]) {
     let anchor = match text.anchor {
         Anchor::Start => "start",
@@ -117,10 +118,12 @@ fn words(out: &mut String, text: &Text, [x, y]: [f64; 2]) {
     let weight = if text.bold { " font-weight=\"bold\"" } else { "" };
     let _ = write!(
         out,
-        "<text x=\"{}\" y=\"{}\" font-size=\"{}\" text-anchor=\"{anchor}\"{weight}>{}</text>",
+        "<text x=\"{}\" y=\"{}\" font-size=\"{}\" text-anchor=\"{anchor}\"{weight} textLength=\"{}\" \
+         lengthAdjust=\"spacingAndGlyphs\">{}</text>",
         mm(x),
         mm(y),
         mm(text.size_mm),
+        mm(text.breadth_mm()),
         escaped(&text.words)
     );
 }

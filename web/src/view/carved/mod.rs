@@ -95,7 +95,7 @@ pub fn CarvedPanel(props: &CarvedPanelProps) -> Html {
                 <Pick label="Angles read" options={vec!["on the flat face".into(), "to the chord line".into()]}
                     picked={REFERENCES.iter().position(|r| *r == reference)} onpick={pick} />
             </div>
-            <div class="carved-blades">{ for blades }</div>
+            <div class={classes!("carved-blades", job.carved.is_none().then_some("unprinted"))}>{ for blades }</div>
             <ReadingsSheet state={state.clone()} />
             { results(props) }
         </div>
