@@ -149,7 +149,13 @@ pub(super) fn Balance(props: &FoundProps) -> Html {
     let density = if b.density_given { "" } else { ", the usual wood's, for the job names none" };
     let then = props.found.plan.as_ref().map_or_else(
         |_| String::new(),
-        |plan| format!(" After the cuts below {}.", plan.after.balance.says()),
+        |plan| {
+            if b.read {
+                format!(" After the cuts below: {}.", plan.after.balance.says())
+            } else {
+                String::new()
+            }
+        },
     );
     html! {
         <p>

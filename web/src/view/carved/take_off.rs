@@ -66,7 +66,7 @@ fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
             <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
             <td>{ fine(units, s.chord_m) }</td>
             <td>{ fine(units, s.thickness_m) }</td>
-            <td>{ left_deg.map(|d| signed(d, 2)) }<small>{ s.note() }</small></td>
+            <td>{ if s.note().is_empty() { left_deg.map_or_else(String::new, |d| signed(d, 2)) } else { s.note().into() } }</td>
         </tr>
     }
 }
