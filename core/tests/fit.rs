@@ -1,8 +1,8 @@
 //! Where propeller, engine and aircraft meet: balances hold, and what has no answer says why.
 
 use spokeshave::air::Air;
-use spokeshave::aircraft::{drag_n, speeds};
-use spokeshave::job::{Aeroplane, Aircraft, DEMOS, Drag, Engine, FlightPoint, Job, PitchControl, Setting};
+use spokeshave::aircraft::drag_n;
+use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, Setting};
 use spokeshave::result::{PointResult, State};
 use spokeshave::rig::Rig;
 
@@ -125,36 +125,4 @@ fn turned_blades_are_a_coarser_propeller() {
     let turned = at(&job, Some(30.0), Setting::FullThrottle {});
     assert!(turned.rpm < drawn.rpm);
     near(turned.figures.blade_angle_075_deg, drawn.figures.blade_angle_075_deg.unwrap() + 2.0, 1e-9);
-}
-
-/// J. D. Anderson, *Introduction to Flight*, chapter 6, the propeller aeroplane CP-1 (from memory, in the book's
-/// units): W 2950 lb, b 35.8 ft, S 174 ft², CD0 0.025, e 0.8: thrust required 279 lb at 100 ft/s, 217 at 150, 263 at
-/// 200, 359 at 250, 491 at 300; greatest L/D 13.6.
-#[test]
-fn validate_drag_anderson_cp_1() {
-    const FOOT_M: f64 = 0.3048;
-    const POUND_N: f64 = 4.448_222;
-    let (b, s) = (35.8 * FOOT_M, 174.0 * FOOT_M * FOOT_M);
-    let drag = Drag { cd0: 0.025, k: None, aspect_ratio: Some(b * b / s), oswald: Some(0.8) };
-    let a = Aeroplane {
-        mass_kg: 2950.0 * POUND_N / 9.806_65,
-        wing_area_m2: s,
-        drag,
-        cl_max: None,
-        engines: 1,
-        rolling_friction: None,
-        slipstream_drag_area_m2: None,
-    };
-    let mut air = Air::standard(0.0, 0.0).unwrap();
-    air.density_kg_m3 = 0.002_377 * 515.379;
-    // The book rounds to three figures and CL before that: 0.5 %.
-    for (v, pounds) in
-        [(100.0, 279.0), (150.0, 217.0), (200.0, 263.0), (250.0, 359.0), (300.0, 491.0), (350.0, 652.0)]
-    {
-        near(drag_n(&a, &air, v * FOOT_M).map(|d| d / POUND_N), pounds, 0.005);
-    }
-    let found = speeds(&a, &air);
-    near(Some(found.greatest_lift_to_drag), 13.6, 0.005);
-    near(Some(found.least_drag_m_s / FOOT_M), 144.8, 0.005);
-    near(Some(found.least_power_m_s / FOOT_M), 110.0, 0.005);
 }

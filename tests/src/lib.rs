@@ -3,10 +3,13 @@
 #![forbid(unsafe_code)]
 
 pub mod browser;
+pub mod check;
 pub mod formula;
+pub mod goldstein;
 pub mod judge;
 pub mod page;
 pub mod reference;
 pub mod tools;
 pub mod tunnel;
+pub mod validation;
 pub mod wood_case;

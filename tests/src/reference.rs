@@ -5,6 +5,15 @@ use std::path::PathBuf;
 use serde_json::{Value, json};
 use spokeshave::job::Job;
 
+/// What most cases are.
+pub const INDEPENDENT: &str = "an independent implementation of the same equations (SciPy; closed-form \
+                               blade and polar; 240 to 960 cosine-spaced elements), computed for this \
+                               project: see reference/README.md";
+/// What those of least induced loss are.
+pub const ADKINS_LIEBECK: &str = "C. N. Adkins and R. H. Liebeck, Design of Optimum Propellers, J. \
+                                  Propulsion and Power 10(5), 1994: its equations by an independent \
+                                  implementation: see reference/README.md";
+
 /// One reference case by its file name without the ending.
 ///
 /// # Panics

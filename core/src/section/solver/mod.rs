@@ -16,6 +16,7 @@
 //! Drela, Giles, AIAA J. 25(10), 1987; Drela, Lecture Notes in Engineering 54, 1989; Veldman, AIAA J. 19(1),
 //! 1981.
 
+pub mod alone;
 mod attempt;
 mod chains;
 mod closure;
@@ -41,7 +42,5 @@ pub use point::{Solved, State};
 pub use settings::{Settings, SolverError, USUAL_NODES};
 pub use sweep::{Sweep, sweep};
 
-#[cfg(test)]
-mod plates;
 #[cfg(test)]
 mod tests;

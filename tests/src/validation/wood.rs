@@ -1,20 +1,27 @@
-//! Mass, tension, bending and flap frequency against an independent implementation of the same equations (see `reference/README.md`).
+//! Mass, tension, bending and flap frequency against an independent implementation of the same equations
+//! (see `reference/README.md`).
 //!
-//! Every case of the folder whose kind begins with `wood.` is read; what it asks for is known by the names of its answers.
+//! Every case of the folder whose kind begins with `wood.` is read; what it asks for is known by the names
+//! of its answers.
 
 use serde_json::Value;
 use spokeshave::rig::{Rig, rotation_rad_s};
 use spokeshave::wood::beam::{Bending, bending_n_m, first_moment, second_moment, tension_n, total};
 use spokeshave::wood::{Carried, strength};
-use spokeshave_tests::reference::{case, numbers};
-use spokeshave_tests::wood_case::{WoodCase, spread};
 
-fn near(what: &str, got: f64, expected: f64, rel: f64) {
-    assert!(
-        (got - expected).abs() <= rel * expected.abs(),
-        "{what}: got {got}, expected {expected} within {rel}"
-    );
-}
+use crate::check::{Basis, Check, Mark, worst};
+use crate::reference::{INDEPENDENT, case, numbers};
+use crate::wood_case::{WoodCase, spread};
+
+const BASIS: Basis = Basis {
+    source: INDEPENDENT,
+    mark: Mark::Computed,
+    why: "exact integrals of the same blade: what is left are the straight pieces between 601 radii",
+};
+const AS_JOB: Basis = Basis {
+    why: "a job's stations: the blade is read off a smooth curve through 41 of them and more",
+    ..BASIS
+};
 
 /// Every case of kind `wood.…` in the folder.
 fn cases() -> Vec<(String, Value)> {
@@ -96,48 +103,57 @@ fn flap(inputs: &Value, blade: &WoodCase) -> Option<f64> {
     Some(beam.modes(1)?[0].rad_s)
 }
 
-#[test]
-fn validate_wood_independent_implementation() {
+/// The blade of every case as arrays.
+pub(super) fn arrays() -> Vec<Check> {
     let all = cases();
-    assert!(!all.is_empty());
-    for (name, case) in all {
-        let rel = case["tolerance"]["rel"].as_f64().unwrap_or(0.005);
-        for (key, expected) in case["answers"].as_object().expect("answers") {
-            let expected = if expected.is_array() {
-                numbers(expected)
-            } else {
-                vec![expected.as_f64().expect("a number")]
-            };
-            let got =
-                figures(&case["inputs"], key).unwrap_or_else(|| panic!("{name}: {key} is not understood"));
-            assert_eq!(got.len(), expected.len(), "{name} {key}");
-            for (i, (g, e)) in got.into_iter().zip(expected).enumerate() {
-                // What is computed by exact integrals of the same blade needs far less than the case allows.
-                near(&format!("{name} {key} {i}"), g, e, rel.min(1e-4));
-            }
-        }
-    }
+    assert!(!all.is_empty(), "the folder has cases of wood");
+    all.iter().flat_map(|(name, case)| answers(name, case)).collect()
+}
+
+fn answers(name: &str, case: &Value) -> Vec<Check> {
+    // What is computed by exact integrals of the same blade needs far less than the case allows.
+    let rel = case["tolerance"]["rel"].as_f64().unwrap_or(0.005).min(1e-4);
+    let column = |(key, expected): (&String, &Value)| {
+        let expected =
+            if expected.is_array() { numbers(expected) } else { vec![expected.as_f64().expect("a number")] };
+        let got = figures(&case["inputs"], key).unwrap_or_else(|| panic!("{name}: {key} is not understood"));
+        assert_eq!(got.len(), expected.len(), "{name} {key}");
+        let one = |(i, (got, expected))| BASIS.relative(format!("radius {i}"), got, expected, rel);
+        let column = got.into_iter().zip(expected).enumerate().map(one).collect();
+        worst(&format!("reference blade, {key}"), column)
+    };
+    case["answers"].as_object().expect("answers").iter().map(column).collect()
 }
 
 /// The same blade as a job: stations, a section without an outline, a material of one's own.
-#[test]
-fn a_job_gives_the_same_mass_and_tension() {
+pub(super) fn as_a_job() -> Vec<Check> {
     let case = case("70_wood_mass_tension");
     let (inputs, answers) = (&case["inputs"], &case["answers"]);
     let rig = Rig::new(&WoodCase::new(inputs).job(inputs)).expect("a valid job");
     let sheet = strength(&rig).expect("a known material");
     let rel = case["tolerance"]["rel"].as_f64().expect("a tolerance");
-    near("mass", sheet.mass.blade_kg, answers["mass_one_blade"].as_f64().unwrap(), rel);
-    near("inertia", sheet.mass.blade_inertia_kg_m2, answers["inertia_one_blade"].as_f64().unwrap(), rel);
-    let (tension, stress, area) =
-        (numbers(&answers["tension"]), numbers(&answers["stress_axial"]), numbers(&answers["A"]));
-    for (i, r) in numbers(&inputs["r"]).into_iter().enumerate() {
-        let nearest =
-            sheet.stations.iter().min_by(|a, b| (a.radius_m - r).abs().total_cmp(&(b.radius_m - r).abs()));
-        let station = nearest.expect("stations");
-        assert!((station.radius_m - r).abs() < 1e-6, "{r}");
-        near(&format!("area at {r}"), station.area_m2, area[i], rel);
-        near(&format!("tension at {r}"), station.tension_n.unwrap(), tension[i], rel);
-        near(&format!("stress at {r}"), station.axial_pa.unwrap(), stress[i], rel);
-    }
+    let number = |key: &str| answers[key].as_f64().expect("a number");
+    let radii = numbers(&inputs["r"]);
+    let station = |r: f64| {
+        let found = sheet.stations.iter().find(|s| (s.radius_m - r).abs() < 1e-6);
+        found.unwrap_or_else(|| panic!("no station at {r}"))
+    };
+    let column = |what: &str, unit, expected: Vec<f64>, got: &[Option<f64>]| {
+        let one = |((r, expected), got): ((&f64, f64), &Option<f64>)| {
+            AS_JOB.relative(format!("at {r} m"), got.unwrap_or(f64::NAN), expected, rel).unit(unit)
+        };
+        worst(&format!("as a job, {what}"), radii.iter().zip(expected).zip(got).map(one).collect())
+    };
+    let stations: Vec<_> = radii.iter().map(|r| station(*r)).collect();
+    let of = |f: &dyn Fn(usize) -> Option<f64>| (0..radii.len()).map(f).collect::<Vec<_>>();
+    let mass = sheet.mass.blade_kg;
+    vec![
+        AS_JOB.relative("as a job, mass", mass, number("mass_one_blade"), rel).unit("kg"),
+        AS_JOB
+            .relative("as a job, inertia", sheet.mass.blade_inertia_kg_m2, number("inertia_one_blade"), rel)
+            .unit("kg m²"),
+        column("area", "m²", numbers(&answers["A"]), &of(&|i| Some(stations[i].area_m2))),
+        column("tension", "N", numbers(&answers["tension"]), &of(&|i| stations[i].tension_n)),
+        column("stress", "Pa", numbers(&answers["stress_axial"]), &of(&|i| stations[i].axial_pa)),
+    ]
 }

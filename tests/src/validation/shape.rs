@@ -1,0 +1,82 @@
+//! Least induced loss against an independent implementation of the same published equations (see
+//! `reference/README.md`).
+
+use spokeshave::rig::rotation_rad_s;
+use spokeshave::shape::adkins_liebeck::{Design, Task, Wanted, design};
+
+use crate::check::{Basis, Check, Mark, worst};
+use crate::reference::{ADKINS_LIEBECK, case, numbers};
+
+const BASIS: Basis = Basis {
+    source: ADKINS_LIEBECK,
+    mark: Mark::Computed,
+    why: "the same equations: what two ways of integrating differ by, figures 1e-4, power 1e-6 (it is what \
+          was asked for), geometry 5e-4",
+};
+
+/// The case's propeller asked for by power, thrust, or whatever.
+///
+/// # Panics
+/// When the case is not understood.
+#[must_use]
+pub fn task(wanted: Wanted) -> Task {
+    let given = &case("40_al_sample_power")["inputs"];
+    let input = |key: &str| given[key].as_f64().expect("a number");
+    Task {
+        airspeed_m_s: input("V"),
+        rotation_rad_s: rotation_rad_s(input("rpm")),
+        radius_m: input("R"),
+        hub_radius_m: input("r_hub"),
+        blades: 2,
+        density_kg_m3: input("rho"),
+        wanted,
+    }
+}
+
+/// Figures and geometry of the sample propeller.
+pub(super) fn least_loss() -> Vec<Check> {
+    let case = case("40_al_sample_power");
+    let (given, answers) = (&case["inputs"], &case["answers"]);
+    let input = |key: &str| given[key].as_f64().expect("a number");
+    let answer = |key: &str| answers[key].as_f64().expect("a number");
+    let eps = input("cd_over_cl");
+    let found = design(task(Wanted::Power(input("power"))), |_| eps).expect("a design");
+    // The same propeller asked for by its thrust.
+    let again = design(task(Wanted::Thrust(answer("T"))), |_| eps).expect("a design");
+    let told = |key: &str, got, rel| BASIS.relative(key, got, answer(key), rel);
+    let mut checks = vec![
+        told("zeta", found.zeta, 1e-4),
+        told("Tc", found.tc, 1e-4),
+        told("Pc", found.pc, 1e-4),
+        told("eta", found.efficiency(), 1e-4),
+        told("T", found.thrust_n(), 1e-4).unit("N"),
+        told("P", found.power_w(), 1e-6).unit("W"),
+        BASIS.relative("zeta, asked for by thrust", again.zeta, answer("zeta"), 1e-4),
+    ];
+    let columns = [
+        ("chord", "m"),
+        ("phi_deg", "°"),
+        ("beta_deg", "°"),
+        ("a", ""),
+        ("a_prime", ""),
+        ("W", "m/s"),
+        ("F", ""),
+    ];
+    for (k, (key, unit)) in columns.into_iter().enumerate() {
+        let expected = numbers(&answers[key]);
+        let one = |(xi, expected): (f64, f64)| {
+            let got = geometry(&found, xi, eps, input("cl"), input("alpha_design_deg"))[k];
+            BASIS.within(format!("at {xi:.3} R"), got, expected, (5e-4 * expected.abs()).max(1e-6)).unit(unit)
+        };
+        let rows = numbers(&given["r_over_R"]).into_iter().zip(expected).map(one).collect();
+        checks.push(worst(&format!("{key} over the radius"), rows));
+    }
+    checks
+}
+
+/// Chord, inflow and blade angle, the two factors, speed and loss at a fraction of the radius.
+fn geometry(found: &Design, xi: f64, eps: f64, cl: f64, alpha_deg: f64) -> [f64; 7] {
+    let flow = found.flow(xi, eps);
+    let phi = flow.inflow_rad.to_degrees();
+    [flow.chord_lift_m / cl, phi, phi + alpha_deg, flow.axial, flow.swirl, flow.speed_m_s, flow.loss]
+}
