@@ -10,8 +10,8 @@
 use super::brief::compared;
 use super::variant::{accepted, rounded, with_angles};
 use super::{ShapeError, Shaped};
-use crate::fit;
-use crate::job::PitchControl;
+use crate::fit::{self, Near};
+use crate::job::{PitchControl, Setting};
 use crate::report::best_of;
 use crate::result::{Origin, Twist, TwistStation};
 use crate::rig::{Rig, air_of};
@@ -115,7 +115,13 @@ fn counted(rig: &Rig, weights: &[f64]) -> Result<Vec<Counted>, ShapeError> {
         .map(|(index, (point, &weight))| {
             let no_answer = |state| ShapeError::NoAnswer { name: point.name.clone(), state };
             let air = air_of(point).map_err(|_| no_answer(crate::result::State::OutOfReach))?;
-            let at = fit::condition(rig, point, air).map_err(no_answer)?;
+            // Full throttle is drawn back where it would pass the limit rpm.
+            let at = if point.setting == (Setting::FullThrottle {}) {
+                fit::answer(rig, point, air, &mut Near::default()).map(|answer| answer.condition)
+            } else {
+                fit::condition(rig, point, air)
+            };
+            let at = at.map_err(no_answer)?;
             Ok(Counted { index, weight, at })
         })
         .collect();

@@ -16,7 +16,7 @@ fn enter() -> String {
 
 /// The job that the page keeps.
 async fn kept(browser: &Browser) -> Result<Option<Job>> {
-    let text = browser.run("return localStorage.getItem('spokeshave.1.job.blank')").await?;
+    let text = browser.run("return spokeshave.keep.atStart()").await?;
     Ok(text.as_str().and_then(|text| Job::from_json(text).ok()))
 }
 

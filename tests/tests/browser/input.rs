@@ -88,7 +88,7 @@ async fn a_file_of_a_hundred_megabytes_is_refused_at_once() -> Result<()> {
 async fn a_kept_job_that_cannot_be_read_is_put_aside_and_not_overwritten() -> Result<()> {
     drive("kept-garbage", async |browser| {
         browser.open_page().await?;
-        browser.run("localStorage.setItem('spokeshave.1.job.blank', '{\"spokeshave\": 1, \"half')").await?;
+        browser.run("spokeshave.keep.before('{\"spokeshave\": 1, \"half')").await?;
         browser.reload().await?;
         browser.wait_for_departures_of(&example()?, STATION).await?;
         println!("{}", message(browser).await?);

@@ -1,5 +1,7 @@
 //! A fault in the program never loses the job, and a job that stops the page does not stop it for ever.
 
+use std::time::Duration;
+
 use anyhow::Result;
 use spokeshave::job::Job;
 use spokeshave_tests::browser::{Browser, drive};
@@ -84,6 +86,57 @@ async fn a_browser_that_lacks_something_is_told_so() -> Result<()> {
         browser.before_any_script("delete window.DecompressionStream").await?;
         browser.go_to_file(&spokeshave_tests::browser::built_page()?).await?;
         browser.wait_for_text("it lacks DecompressionStream").await
+    })
+    .await
+}
+
+#[tokio::test(flavor = "multi_thread")]
+async fn a_write_that_was_cut_off_leaves_the_one_before() -> Result<()> {
+    drive("cut-off", async |browser| {
+        browser.open_page().await?;
+        let older = job()?;
+        browser.run(&format!("spokeshave.keep.before({})", serde_json::to_string(&older)?)).await?;
+        browser.run("spokeshave.keep.before('{\"newer\": 1}')").await?;
+        let halved =
+            "const keys = Object.keys(localStorage).filter(k => k.startsWith('spokeshave.1.job.blank.'));
+            const turn = key => Number(localStorage[key].split(' ')[0]);
+            const newest = keys.sort((a, b) => turn(b) - turn(a))[0];
+            localStorage[newest] = localStorage[newest].slice(0, -3);
+            return keys.length;";
+        assert_eq!(browser.run(halved).await?, 2);
+        assert_eq!(browser.run("return spokeshave.keep.atStart()").await?, older);
+        Ok(())
+    })
+    .await
+}
+
+/// Edits, each with a reload after 0 to 90 ms; `SPOKESHAVE_RELOADS=200` goes on longer.
+#[tokio::test(flavor = "multi_thread")]
+async fn reloads_in_the_middle_of_edits_lose_no_job() -> Result<()> {
+    let reloads: u32 = std::env::var("SPOKESHAVE_RELOADS").map_or(Ok(8), |n| n.parse())?;
+    drive("reloads", async |browser| {
+        browser.open_page().await?;
+        let mut before = example()?.propeller.stations[3].chord_m;
+        let mut last_edit_lost = 0;
+        for i in 0..reloads {
+            let chord_mm = 90.0 + 0.1 * f64::from(i);
+            let edit = format!(
+                "const box = [...document.querySelectorAll('input')].find(b => b.ariaLabel?.toLowerCase().startsWith('chord at station 4'));
+                box.value = '{chord_mm}';
+                for (const kind of ['input', 'change']) {{ box.dispatchEvent(new Event(kind, {{ bubbles: true }})); }}"
+            );
+            browser.run(&edit).await?;
+            tokio::time::sleep(Duration::from_millis(10 * u64::from(i % 10))).await;
+            browser.reload().await?;
+            let kept = browser.run("return spokeshave.keep.atStart()").await?;
+            let kept = Job::from_json(kept.as_str().unwrap_or_default())?.propeller.stations[3].chord_m;
+            let taken = (kept - 1e-3 * chord_mm).abs() < 1e-9;
+            assert!(taken || (kept - before).abs() < 1e-9, "reload {i}: {kept} m");
+            last_edit_lost += u32::from(!taken);
+            before = kept;
+        }
+        println!("{reloads} reloads, jobs lost 0, last edits lost {last_edit_lost}");
+        Ok(())
     })
     .await
 }

@@ -7,12 +7,13 @@
   var node = document.getElementById("page-job");
   var embedded = node ? node.textContent.trim() : "";
   var mark = embedded ? fingerprint(embedded) : "blank";
-  var JOB = "spokeshave.1.job." + mark;
+  // Two places by turns, so that a write that is cut off leaves the one before.
+  var PLACES = ["spokeshave.1.job." + mark + ".0", "spokeshave.1.job." + mark + ".1"];
   var ASIDE = "spokeshave.1.aside." + mark;
   var AT_WORK = "spokeshave.1.at-work." + mark;
   var latest = null;
 
-  // 32-bit FNV-1a over UTF-16 units: tells files apart, guards nothing.
+  // 32-bit FNV-1a over UTF-16 units: tells files apart and whole text from half of it.
   function fingerprint(text) {
     var hash = 0x811c9dc5;
     for (var i = 0; i < text.length; i += 1) {
@@ -34,13 +35,30 @@
     try { window.localStorage.removeItem(key); } catch (refused) { return; }
   }
 
+  // What a place holds: "turn checksum job"; nothing where the checksum says that it is not whole.
+  function whole(key) {
+    var parts = /^(\d+) ([0-9a-f]+) ([^]*)$/.exec(read(key) || "");
+    return parts && fingerprint(parts[3]) === parts[2] ? { turn: Number(parts[1]), job: parts[3] } : null;
+  }
+
+  function newest() {
+    var first = whole(PLACES[0]), second = whole(PLACES[1]);
+    return second && (!first || second.turn > first.turn) ? second : first;
+  }
+
+  // Over the older of the two.
+  function keep(job) {
+    var last = newest(), turn = last ? last.turn + 1 : 0;
+    return write(PLACES[turn % 2], turn + " " + fingerprint(job) + " " + job);
+  }
+
   page.keep = {
     // The job to start with: the one kept here, else the one in the file, else null (an example).
     // An empty string kept here says that the user chose the example.
     atStart: function () {
-      var kept = read(JOB);
-      if (kept === null) { return embedded || null; }
-      return kept || null;
+      var kept = newest();
+      if (!kept) { return embedded || null; }
+      return kept.job || null;
     },
     // The job this very file was saved with, else null.
     inFile: function () { return embedded || null; },
@@ -49,7 +67,7 @@
     before: function (json) {
       latest = json;
       if (node) { node.textContent = json.replace(/</g, "\\u003c"); }
-      var kept = write(JOB, json);
+      var kept = keep(json);
       write(AT_WORK, "1");
       return kept;
     },
@@ -65,7 +83,7 @@
     setAside: function () {
       var job = page.keep.latest();
       if (job) { write(ASIDE, job); }
-      write(JOB, "");
+      keep("");
       remove(AT_WORK);
     }
   };
