@@ -1,8 +1,8 @@
 //! From the drawing to wood: where every section stands, the solid, the blank, the sheets of paper and the files.
 //!
 //! Frame: the first blade along `x`, the direction in which it turns along `y` (a propeller that turns clockwise seen
-//! from behind; against it for the other), the direction of flight along `z`. The back of the blank is its aft face, down
-//! on the bench while "the blank lies on its back". Lengths are metres in the geometry and millimetres on paper.
+//! from behind; against it for the other), the direction of flight along `z`. The rear of the blank looks aft and lies
+//! down on the bench; its front looks ahead. Of the blade the flat, rear side is the face, the cambered, forward one the back (common practice). Lengths are metres in the geometry and millimetres on paper.
 //!
 //! Sections lie in planes square to the blade, each with its centroid (or a point of its chord line) on the stacking
 //! line. Nothing here judges strength.
@@ -20,6 +20,7 @@ mod ring;
 mod shape;
 pub(crate) mod sheet;
 mod solid;
+pub(crate) mod stock;
 mod turned;
 mod unit;
 mod work;

@@ -6,7 +6,7 @@ use crate::paper::words_apart;
 use spokeshave::bench::{
     Bench, BenchError, Fault, Paper, Side, Solid, Unit, files, sheet_files, template_card,
 };
-use spokeshave::job::{DEMOS, Flange, Hub, Job, Making, PitchControl, Rotation, Wood};
+use spokeshave::job::{AngleReference, DEMOS, Flange, Hub, Job, Making, PitchControl, Rotation, Wood};
 use spokeshave::rig::Rig;
 
 fn demo(index: usize) -> Job {
@@ -150,6 +150,70 @@ fn two_cards_back_to_back_leave_the_section() {
             let section = 1e6 * station.ring.area_m2();
             assert!((area / section - 1.0).abs() < 1e-9, "station {}", station.number);
         }
+    }
+}
+
+/// Jobs with faces of several kinds: flat, round on both sides, cambered; turning either way.
+fn faces() -> Vec<Job> {
+    let mut all: Vec<Job> = (0..DEMOS.len()).map(demo).collect();
+    for section in ["naca-00xx", "naca-44xx", "naca-16"] {
+        let mut job = demo(0);
+        job.propeller.stations.iter_mut().for_each(|s| s.section = section.into());
+        job.propeller.angle_reference = AngleReference::ChordLine;
+        job.wood = None;
+        all.push(job);
+    }
+    let mut other = demo(0);
+    other.propeller.rotation = Rotation::AnticlockwiseFromBehind;
+    all.push(other);
+    all
+}
+
+/// Who planes straight from mark to mark takes nothing of the blade, and leaves nothing on a flat face.
+#[test]
+fn the_face_line_touches_the_section_and_never_cuts_into_it() {
+    for job in faces() {
+        let bench = bench(&job).unwrap();
+        for station in &bench.stations {
+            let h = &station.heights;
+            let [lead, trail] = h.face_m.unwrap();
+            let [y_lead, y_trail] = [h.outline_m[0], -h.outline_m[1]];
+            let line = |y: f64| trail + (lead - trail) * (y - y_trail) / (y_lead - y_trail);
+            let over = |p: &[f64; 2]| p[1] - bench.blank.back_m - line(p[0]);
+            let least = station.ring.points.iter().map(over).fold(f64::INFINITY, f64::min);
+            assert!((-1e-9..5e-5).contains(&least), "station {}: {least}", station.number);
+            // The marks stand on the outline of the plan, outside the section.
+            let [low, high] = station.ring.span(0);
+            assert!(y_lead >= high && y_trail <= low, "station {}", station.number);
+            // The slope is what the protractor reads on a flat face, and that of the section's table, where it has one of this thickness.
+            let Some(face_rad) = station.face_rad else { continue };
+            let slope = (lead - trail).atan2(y_lead - y_trail);
+            assert!((slope - face_rad).abs() < 1e-9, "station {}: {slope} {face_rad}", station.number);
+            let tabled = bench.form.blade.face_to_chord_rad(station.ring.radius_m).unwrap();
+            let thin = station.thickness_m < 0.2 * station.chord_m;
+            assert!(
+                !thin || (station.angle_rad - tabled - face_rad).abs() < 3e-3,
+                "station {}",
+                station.number
+            );
+        }
+    }
+}
+
+/// The plan is sawn to the surface's own outline: the heights are those of the marks on it.
+#[test]
+fn the_heights_stand_on_the_outline_of_the_plan() {
+    for index in 0..DEMOS.len() {
+        let bench = bench(&demo(index)).unwrap();
+        let stations = bench.stations.iter().filter(|s| s.ring.radius_m < bench.form.tip_from_m);
+        for station in stations {
+            let near = |a: f64, b: f64| (a - b).abs() < 1e-9;
+            let ring = bench.rings.iter().find(|r| near(r.radius_m, station.ring.radius_m));
+            let Some(ring) = ring else { continue };
+            let [low, high] = ring.span(0);
+            assert!(near(station.heights.outline_m[0], high) && near(station.heights.outline_m[1], -low));
+        }
+        assert!(bench.rings.iter().any(|r| (r.radius_m - bench.stations[0].ring.radius_m).abs() < 1e-9));
     }
 }
 

@@ -16,7 +16,7 @@ const PLANING_M: f64 = 0.003;
 /// One lamination.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Plank {
-    /// Back and front face above the back of the blank, m.
+    /// Rear and front face above the rear of the blank, m.
     pub faces_m: [f64; 2],
     /// By how much it is turned about the axis in the direction of turning, rad.
     pub turn_rad: f64,
@@ -27,7 +27,7 @@ pub struct Plank {
 /// Laminations of a blank.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Layers {
-    /// From the back to the front.
+    /// From the rear to the front.
     pub planks: Vec<Plank>,
     /// Turn of each against its neighbour, rad.
     pub step_rad: f64,
@@ -56,7 +56,7 @@ pub struct Blank {
     pub width_m: f64,
     /// Length: of the whole blank, or of one blade with its half of the hub, m.
     pub length_m: f64,
-    /// Back face along the direction of flight, m.
+    /// Rear face along the direction of flight, m.
     pub back_m: f64,
     /// The boss, where hub and blades are one piece.
     pub boss: Option<Boss>,
@@ -68,19 +68,23 @@ pub struct Blank {
     pub fanned: Layers,
 }
 
-/// Where a station's edges lie while the blank lies on its back.
+/// Steepest face line that is marked on the sides of the blank: its rise over its run.
+const STEEPEST: f64 = 50.0;
+
+/// Where a station lies while the rear of the blank lies on the bench. Pairs are of the leading and of the trailing edge's side.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Heights {
     /// Radius, m.
     pub radius_m: f64,
-    /// Leading edge above the bench, m.
-    pub leading_m: f64,
-    /// Trailing edge above the bench, m.
-    pub trailing_m: f64,
+    /// The sawn sides of the blade from the middle line of the blank, m.
+    pub outline_m: [f64; 2],
+    /// The face line where it comes out at these sides, above the bench, m; none where the section stands upright. Below 0 or above the blank's thickness
+    /// it comes out at the rear or the front instead.
+    pub face_m: Option<[f64; 2]>,
+    /// The edges themselves above the bench, m.
+    pub edges_m: [f64; 2],
     /// Lowest and highest wood above the bench, m.
     pub wood_m: [f64; 2],
-    /// Leading edge ahead of, and trailing edge behind the middle line of the blank, m.
-    pub plan_m: [f64; 2],
 }
 
 impl Blank {
@@ -154,16 +158,20 @@ impl Blank {
         })
     }
 
-    /// Where the edges of a section lie while the blank lies on its back.
+    /// Where a section lies while the rear of the blank lies on the bench; `sawn_m`: the sides of the blade in plan there, against and along the turning, m.
     #[must_use]
-    pub fn heights(&self, ring: &Ring) -> Heights {
+    pub fn heights(&self, ring: &Ring, sawn_m: [f64; 2]) -> Heights {
         let up = |z: f64| z - self.back_m;
+        let [a, b] = ring.face_line();
+        let rise = (b[1] - a[1]) / (b[0] - a[0]);
+        let line = |y: f64| up(a[1] + rise * (y - a[0]));
+        let [against, along] = sawn_m;
         Heights {
             radius_m: ring.radius_m,
-            leading_m: up(ring.leading_edge()[1]),
-            trailing_m: up(ring.trailing_edge()[1]),
+            outline_m: [along, -against],
+            face_m: (b[0] > a[0] && rise.abs() < STEEPEST).then(|| [line(along), line(against)]),
+            edges_m: [ring.leading_edge(), ring.trailing_edge()].map(|p| up(p[1])),
             wood_m: ring.span(1).map(up),
-            plan_m: [ring.leading_edge()[0], -ring.trailing_edge()[0]],
         }
     }
 }

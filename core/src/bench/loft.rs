@@ -26,7 +26,7 @@ const FREE_OF_BOSS: f64 = 1.25;
 pub struct Boss {
     /// Radius, m.
     pub radius_m: f64,
-    /// Back and front face along the direction of flight, m.
+    /// Rear and front face along the direction of flight, m.
     pub faces_m: [f64; 2],
     /// How far its holes reach from the axis, m; 0 without any.
     pub drilled_m: f64,

@@ -40,6 +40,33 @@ impl Ring {
         side
     }
 
+    /// The face line: the straight line under the face that touches the section on both sides of the middle of its chord, and under which it has no wood; on
+    /// a flat face it lies, a hollow one it bridges, a round one it touches. Two points of the outline, the one nearer the trailing edge first, m.
+    #[must_use]
+    pub fn face_line(&self) -> [[f64; 2]; 2] {
+        let (lead, trail) = (self.leading_edge(), self.trailing_edge());
+        let chord = [lead[0] - trail[0], lead[1] - trail[1]];
+        let seen = |p: &[f64; 2]| {
+            let d = [p[0] - trail[0], p[1] - trail[1]];
+            // Along the chord line, and above it; both times the chord.
+            ([d[0] * chord[0] + d[1] * chord[1], d[1] * chord[0] - d[0] * chord[1]], *p)
+        };
+        let middle = 0.5 * (chord[0].powi(2) + chord[1].powi(2));
+        let (behind, ahead): (Vec<_>, Vec<_>) =
+            self.points.iter().map(seen).partition(|([along, _], _)| *along < middle);
+        let over_middle = |a: [f64; 2], b: [f64; 2]| a[1] + (b[1] - a[1]) * (middle - a[0]) / (b[0] - a[0]);
+        let pairs = behind.iter().flat_map(|a| ahead.iter().map(move |b| (a, b)));
+        let lowest = pairs.min_by(|p, q| over_middle(p.0.0, p.1.0).total_cmp(&over_middle(q.0.0, q.1.0)));
+        lowest.map_or([trail, lead], |(a, b)| [a.1, b.1])
+    }
+
+    /// Angle of the face line to the plane of rotation, rad.
+    #[must_use]
+    pub fn face_rad(&self) -> f64 {
+        let [a, b] = self.face_line();
+        (b[1] - a[1]).atan2(b[0] - a[0])
+    }
+
     /// Least and greatest of one coordinate, m: 0 along the turning, 1 along the flight.
     #[must_use]
     pub fn span(&self, axis: usize) -> [f64; 2] {
@@ -104,6 +131,15 @@ impl Ring {
 #[cfg(test)]
 mod tests {
     use super::*;
+
+    #[test]
+    fn the_face_line_bridges_a_hollow_face() {
+        // From the trailing edge over the back round the leading edge and along a face that is hollow in the middle, feet at 0.2 and 0.7.
+        let points =
+            vec![[0.0, 0.0], [0.3, 0.2], [0.7, 0.2], [1.0, 0.0], [0.7, -0.06], [0.5, 0.02], [0.2, -0.05]];
+        let ring = Ring { radius_m: 0.3, points };
+        assert_eq!((ring.leading_edge(), ring.face_line()), ([1.0, 0.0], [[0.2, -0.05], [0.7, -0.06]]));
+    }
 
     #[test]
     fn a_ring_that_crosses_itself_says_over_what_length() {

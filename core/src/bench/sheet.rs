@@ -15,6 +15,7 @@ pub use template::{Card, Side, card as template_card};
 
 use super::draw::Drawing;
 use super::page::{Leaf, Paper};
+use super::stock::Stock;
 use super::unit::Unit;
 use super::work::Bench;
 
@@ -23,7 +24,9 @@ use super::work::Bench;
 pub fn leaves(bench: &Bench, paper: Paper, unit: Unit) -> Vec<Leaf> {
     let room = paper.room_mm();
     let mut leaves = tables(bench, paper, unit);
-    leaves.push(layers::leaf(bench, unit, room));
+    if Stock::of(&bench.job).is_wood() || bench.blank.layers.planks.len() > 1 {
+        leaves.push(layers::leaf(bench, unit, room));
+    }
     let mut blank = vec![plan::leaf(bench, unit, room), side::leaf(bench)];
     if bench.blank.boss.is_some() {
         blank.push(hub::leaf(bench, unit));

@@ -23,6 +23,15 @@ impl Unit {
         }
     }
 
+    /// Its name behind "in".
+    #[must_use]
+    pub fn plural(self) -> &'static str {
+        match self {
+            Self::Millimetre => "mm",
+            Self::Inch => "inches",
+        }
+    }
+
     /// A length (m) as a figure: to a tenth of a millimetre, or two hundredths of that in inches.
     #[must_use]
     pub fn figure(self, metres: f64) -> String {
@@ -42,6 +51,25 @@ impl Unit {
     #[must_use]
     pub fn say(self, metres: f64) -> String {
         format!("{} {}", self.figure(metres), self.sign())
+    }
+
+    /// A torque (N m) as it is set.
+    #[must_use]
+    pub fn torque(self, newton_metres: f64) -> String {
+        match self {
+            Self::Millimetre => format!("{newton_metres:.1} N m"),
+            // 1 lbf ft is 0.3048 m of 4.448 222 N.
+            Self::Inch => format!("{:.1} lbf ft", newton_metres / 1.355_818),
+        }
+    }
+
+    /// A volume (m³) of anything but boards.
+    #[must_use]
+    pub fn bulk(self, cubic_metres: f64) -> String {
+        match self {
+            Self::Millimetre => format!("{:.1} cm³", 1e6 * cubic_metres),
+            Self::Inch => format!("{:.2} in³", cubic_metres * (1e3 / INCH_MM).powi(3)),
+        }
     }
 
     /// A volume (m³) as it is bought: litres, or board feet (144 cubic inches).

@@ -31,7 +31,7 @@ pub struct Carved {
     pub thickness_m: f64,
     /// Blade angle to the chord line, rad.
     pub angle_rad: f64,
-    /// Blade angle on the flat face, rad, where there is one.
+    /// Angle of the face line, rad, where the face is flat.
     pub face_rad: Option<f64>,
     /// Its edges on the bench.
     pub heights: Heights,
@@ -85,8 +85,9 @@ impl Bench {
                     chord_m,
                     thickness_m: cut.thickness_ratio * chord_m,
                     angle_rad: cut.angle_rad,
-                    face_rad: blade.face_to_chord_rad(radius_m).map(|f| cut.angle_rad - f),
-                    heights: blank.heights(&ring),
+                    // As drawn: the angle that is tabled for its section ends with the thickest of the tables.
+                    face_rad: blade.face_to_chord_rad(radius_m).map(|_| ring.face_rad()),
+                    heights: blank.heights(&ring, sawn_m(&rings, &ring)),
                     ring,
                 }
             })
@@ -103,7 +104,7 @@ impl Bench {
         }
     }
 
-    /// A point of a ring on paper, mm: seen from the tip towards the hub, height above the back of the blank upward.
+    /// A point of a ring on paper, mm: seen from the tip towards the hub, height above the rear of the blank upward.
     #[must_use]
     pub fn on_paper(&self, p: [f64; 2]) -> [f64; 2] {
         [1e3 * self.hand() * p[0], 1e3 * (p[1] - self.blank.back_m)]
@@ -138,6 +139,18 @@ impl Bench {
         let angle = self.form.blade.cut(r).angle_rad;
         (angle, TAU * r * angle.tan())
     }
+}
+
+/// The sides of the blade in plan at a station, m: those of the surface, within which its own section lies.
+fn sawn_m(rings: &[Ring], station: &Ring) -> [f64; 2] {
+    let [low, high] = station.span(0);
+    let outer = rings.partition_point(|r| r.radius_m < station.radius_m);
+    let (Some(b), Some(a)) = (rings.get(outer), rings.get(outer.saturating_sub(1))) else {
+        return [low, high];
+    };
+    let share = ((station.radius_m - a.radius_m) / (b.radius_m - a.radius_m).max(f64::MIN_POSITIVE)).min(1.0);
+    let surface = [0, 1].map(|k| a.span(0)[k] + share * (b.span(0)[k] - a.span(0)[k]));
+    [low.min(surface[0]), high.max(surface[1])]
 }
 
 fn faults(rings: &[Ring], blank: &Blank) -> Vec<Fault> {

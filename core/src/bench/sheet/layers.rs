@@ -3,6 +3,7 @@
 use crate::bench::blank::Layers;
 use crate::bench::draw::{Anchor, Drawing, Item, Layer};
 use crate::bench::page::Leaf;
+use crate::bench::stock::Stock;
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
 
@@ -13,11 +14,11 @@ pub(super) fn leaf(bench: &Bench, unit: Unit, room: [f64; 2]) -> Leaf {
     let layers = &bench.blank.layers;
     let mut y = -lines(&mut drawing, [0.0, 0.0], 3.0, &words(bench, unit)) - 4.0;
     let header = [
-        figures("lamination\nfrom the back", 30.0),
+        figures("lamination\nfrom the rear", 30.0),
         figures("from", 20.0),
         figures("to", 20.0),
         figures("width", 24.0),
-        figures("turned", 24.0),
+        figures("turned about\nthe axis", 28.0),
     ];
     let rows: Vec<Vec<String>> = layers
         .planks
@@ -39,16 +40,18 @@ pub(super) fn leaf(bench: &Bench, unit: Unit, room: [f64; 2]) -> Leaf {
 }
 
 fn turned(rad: f64) -> String {
-    if rad == 0.0 { "no".into() } else { format!("{:.2}°", rad.to_degrees()) }
+    if rad == 0.0 { "straight".into() } else { format!("{:.2}°", rad.to_degrees()) }
 }
 
 fn words(bench: &Bench, unit: Unit) -> Vec<String> {
     let (layers, fanned) = (&bench.blank.layers, &bench.blank.fanned);
     let thick = bench.blank.thickness_m / layers.planks.len() as f64;
+    let stock = Stock::of(&bench.job);
     let boards = |layers: &Layers| {
         format!(
-            "{} boards {} long, up to {} wide, {} thick when planed; {} to buy with {} a board for planing",
+            "{} {} {} long, up to {} wide, {} thick when planed; {} to buy with {} each for planing",
             layers.boards,
+            stock.board(),
             unit.say(layers.board_length_m),
             unit.say(layers.width_m()),
             unit.say(thick),
@@ -67,7 +70,7 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
     if layers.step_rad != 0.0 {
         words.push("Each lamination is turned about the axis, a front one in the direction of turning; widths are square to it.".into());
     }
-    words.push(format!("Heights of the faces above the back of the blank, in {}.", unit.sign()));
+    words.push(format!("Heights of the faces above the rear of the blank, in {}.", unit.plural()));
     words
 }
 

@@ -1,4 +1,4 @@
-//! The blank seen along its width, back to the left: both edges, the wood's lowest and highest line, the glue lines.
+//! The blank seen along its width, its rear to the left: both edges, the wood's lowest and highest line, the glue lines.
 
 use crate::bench::draw::{Anchor, Drawing, Layer};
 use crate::bench::page::Leaf;
@@ -32,11 +32,10 @@ pub(super) fn leaf(bench: &Bench) -> Leaf {
         drawing.line(Layer::Thin, [[0.0, y], [thick, y]]);
         drawing.bold([thick + 1.0, y - 1.0], 3.0, Anchor::Start, station.number.to_string());
         let mark = |drawing: &mut Drawing, x: f64| drawing.circle(Layer::Thin, [1e3 * x, y], 0.8);
-        mark(&mut drawing, station.heights.leading_m);
-        mark(&mut drawing, station.heights.trailing_m);
+        station.heights.edges_m.into_iter().for_each(|x| mark(&mut drawing, x));
     }
     let foot = [
-        "left: back of the blank, right: front",
+        "left: rear of the blank, right: front",
         "full lines: lowest and highest wood",
         "dashed, ringed: the two edges,",
         "the leading edge in front",

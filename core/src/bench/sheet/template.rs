@@ -1,12 +1,12 @@
-//! Station templates: for each station a card for the cambered side and one for the face.
+//! Station templates: for each station a card for the back (the cambered, forward side) and one for the face (the flat, rear side).
 //!
-//! Seen from the tip towards the hub, standing as in the propeller while the blank lies on its back. The cards meet along
+//! Seen from the tip towards the hub, standing as in the propeller while the rear of the blank lies on the bench. The cards meet along
 //! the chord line, drawn out past both edges: laid back to back they leave the section's outline between them, and the
 //! line on which they meet is the angle line. Their outer edges are the datum: square to the axis and at the same
 //! distance from the blank at every station, so that a straight-edge over several cards shows a twist that is out.
 
 use crate::bench::draw::{Anchor, Drawing, Item, Layer, Text, breadth_mm};
-use crate::bench::page::Leaf;
+use crate::bench::page::{Leaf, wrapped};
 use crate::bench::unit::Unit;
 use crate::bench::work::{Bench, Carved};
 
@@ -15,9 +15,9 @@ use super::table::lines;
 /// Which side of the section a card lies on.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum Side {
-    /// The cambered side.
+    /// The back: the cambered, forward side.
     Upper,
-    /// The face.
+    /// The face: the flat, rear side.
     Lower,
 }
 
@@ -132,25 +132,29 @@ const MARK_MM: f64 = 2.5;
 /// What stands on a card.
 fn words(station: &Carved, side: Side, unit: Unit) -> Vec<String> {
     let degrees = |rad: f64| format!("{:.1}°", rad.to_degrees());
-    let side = if side == Side::Upper { "upper" } else { "lower" };
+    let side = if side == Side::Upper { "back" } else { "face" };
     let mut words = vec![
         format!("{} {side}", station.number),
         format!("r {}", unit.say(station.heights.radius_m)),
         format!("chord line {}", degrees(station.angle_rad)),
     ];
-    words.extend(station.face_rad.map(|face| format!("on the face {}", degrees(face))));
+    words.extend(station.face_rad.map(|face| format!("face {}", degrees(face))));
     words
 }
 
 /// What the sheet of templates says on top.
-fn note(bench: &Bench, unit: Unit) -> Vec<String> {
-    let datum = unit.say(1e-3 * datum_mm(bench));
-    vec![
-        "Seen from the tip towards the hub. Upper cards lie on the cambered side, lower cards on the face; a pair meets along".into(),
-        format!("the chord line. Thick edges are the datum: square to the axis, {datum} ahead of the front and behind the back of the"),
-        "blank. The mark on them is the middle line of the blank (pitch axis). Cut on the line, glue to card or ply.".into(),
-    ]
+fn note(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<String> {
+    let words = format!(
+        "Seen from the tip towards the hub. Back cards lie on the back of the blade (cambered, forward), face cards on its face (flat, rear); a pair meets along the \
+         chord line, here drawn apart. Thick edges are the datum: square to the axis, {} ahead of the front and behind the rear of the blank. The mark on them is the \
+         middle line of the blank (pitch axis). Cut on the line, glue to card or ply.",
+        unit.say(1e-3 * datum_mm(bench))
+    );
+    wrapped(&words, NOTE_MM, room[0])
 }
+
+/// Size of its letters, mm.
+const NOTE_MM: f64 = 2.9;
 
 /// Room between pairs, and between the cards of a pair beside the wood itself, mm.
 const GAP_MM: f64 = 3.0;
@@ -158,7 +162,8 @@ const LIFT_MM: f64 = 4.0;
 
 /// Templates laid out on leaves that fit `room`; a card larger than that has a leaf of its own.
 pub(super) fn leaves(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<Leaf> {
-    let head = 16.0;
+    let note = note(bench, unit, room);
+    let head = 1.5 * NOTE_MM * note.len() as f64 + 3.0;
     let mut shelves: Vec<Shelf> = Vec::new();
     for station in &bench.stations {
         place(&mut shelves, &pair(bench, station, unit), room[0]);
@@ -176,7 +181,7 @@ pub(super) fn leaves(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<Leaf> {
     let of = pages.len();
     let leaf = |(i, (_, shelves)): (usize, (f64, Vec<Shelf>))| {
         let mut drawing = Drawing::default();
-        lines(&mut drawing, [0.0, 0.0], 2.9, &note(bench, unit));
+        lines(&mut drawing, [0.0, 0.0], NOTE_MM, &note);
         let mut y = -head;
         for shelf in shelves {
             drawing.add(&shelf.drawing, [0.0, y]);
