@@ -9,7 +9,6 @@
 
 mod blank;
 pub(crate) mod draw;
-mod drilling;
 mod error;
 mod file;
 mod form;
@@ -26,9 +25,9 @@ mod unit;
 mod work;
 mod write;
 
+pub use crate::drilling::{Hole, Pattern};
 pub use blank::{Blank, Heights, Layers, Plank};
 pub use draw::{Anchor, Drawing, Item, Layer, Stroke, Text};
-pub use drilling::{Hole, Pattern};
 pub use error::{BenchError, Fault};
 pub use file::{File, files, sheet_files};
 pub use form::{Form, SIDE_POINTS};

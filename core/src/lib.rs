@@ -15,6 +15,7 @@ pub mod change;
 pub mod curve;
 pub mod dossier;
 pub mod drawn;
+pub mod drilling;
 pub mod engine;
 pub mod fit;
 pub mod job;

@@ -11,6 +11,7 @@ mod logbook;
 mod search;
 mod shape;
 mod strength;
+mod verdict;
 
 pub use crate::job::Figure;
 pub use carved::{
@@ -30,6 +31,7 @@ pub use strength::{
     CaseFigures, CaseKind, CaseResult, FrequencyLine, Governing, HubResult, Mass, MaterialUsed, ModeKind,
     NearOrder, RunningStation, RunningTwist, Strength, StressKind, StressStation, Vibration,
 };
+pub use verdict::{Finding, Verdict};
 
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]

@@ -23,14 +23,18 @@ mod stands;
 mod strength;
 mod stress;
 mod twist;
+mod verdict;
 mod vibration;
 
 pub use blade::{BladeBeam, WoodError};
 pub use margin::{least_margin, least_margin_like};
 pub use mass::mass;
+pub(crate) use material::is_wood;
 pub use material::{Material, Strength, material};
 pub use moisture::at_moisture;
 pub use places::{Doubt, Place};
+pub use remedy::{Say, sentence};
 pub use species::{Kind, SPECIES, Species};
 pub use strength::strength;
 pub use stress::{Carried, Stresses};
+pub use verdict::verdict;

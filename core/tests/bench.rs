@@ -4,7 +4,7 @@ use std::collections::{HashMap, HashSet};
 
 use crate::paper::words_apart;
 use spokeshave::bench::{
-    Bench, BenchError, Fault, Paper, Side, Solid, Unit, files, sheet_files, template_card,
+    Bench, BenchError, Fault, Item, Paper, Side, Solid, Unit, files, sheet_files, template_card,
 };
 use spokeshave::job::{AngleReference, DEMOS, Flange, Hub, Job, Making, PitchControl, Rotation, Wood};
 use spokeshave::rig::Rig;
@@ -353,6 +353,22 @@ fn all_text_stays_on_its_sheet_and_apart() {
             bench.sheets(paper, unit).iter().for_each(words_apart);
         }
     }
+}
+
+/// A blade that does not hold is not made by mistake: every sheet says so, and the card in full.
+#[test]
+fn every_sheet_of_a_blade_that_does_not_hold_says_so() {
+    let said = |job: &Job| {
+        let sheets = bench(job).unwrap().sheets(Paper::A4, Unit::Millimetre);
+        let warns = |item: &Item| matches!(item, Item::Text(t) if t.words.starts_with("NOT STRONG ENOUGH as drawn: margin −"));
+        sheets.iter().map(|s| s.frame.items.iter().any(warns)).collect::<Vec<bool>>()
+    };
+    let mut thin = demo(0);
+    thin.propeller.stations.iter_mut().for_each(|s| s.thickness_ratio *= 0.75);
+    assert!(said(&thin).iter().all(|s| *s));
+    assert!(said(&demo(0)).iter().all(|s| !s));
+    assert_eq!(bench(&demo(0)).unwrap().warning(), None);
+    bench(&thin).unwrap().sheets(Paper::Letter, Unit::Inch).iter().for_each(words_apart);
 }
 
 #[test]

@@ -3,10 +3,13 @@
 use crate::any_job::jobs;
 use proptest::prelude::*;
 use serde_json::Value;
-use spokeshave::job::{DEMOS, Engine, Hub, Job, LinePoint, Making, OwnMaterial, Species, StressLimits, Wood};
-use spokeshave::result::{CaseFigures, CaseKind, ModeKind, NearOrder, Strength};
+use spokeshave::job::{
+    DEMOS, Engine, Hub, Job, LinePoint, Making, OwnMaterial, PitchControl, Setting, Species, StressLimits,
+    Wood,
+};
+use spokeshave::result::{CaseFigures, CaseKind, Finding, ModeKind, NearOrder, Strength};
 use spokeshave::rig::Rig;
-use spokeshave::wood::strength;
+use spokeshave::wood::{strength, verdict};
 
 fn demo(i: usize) -> Job {
     Job::from_json(DEMOS[i].json).unwrap()
@@ -47,7 +50,9 @@ fn every_demo_has_a_whole_sheet() {
         let sheet = sheet(&self::demo(i));
         let missing = nulls("", &serde_json::to_value(&sheet).unwrap());
         let allowed = |p: &String| {
-            [".thicker_m", ".hub", ".station", "_departure_deg"].iter().any(|end| p.ends_with(end))
+            [".thicker_m", ".hub", ".station", "_departure_deg", ".past_boss_m"]
+                .iter()
+                .any(|end| p.ends_with(end))
         };
         assert!(missing.iter().all(allowed), "{}: {missing:?}", demo.name);
         assert!(sheet.cases.iter().any(|c| c.kind == CaseKind::Overspeed), "{}", demo.name);
@@ -60,6 +65,7 @@ fn every_demo_has_a_whole_sheet() {
             demo.name,
             least.sentence
         );
+        assert_eq!(sheet.verdict.finding, Finding::Held, "{}: {}", demo.name, sheet.verdict.sentence);
         assert!(sheet.running.iter().all(|r| r.settled), "{}: {:?}", demo.name, sheet.running);
         let modes: Vec<ModeKind> = sheet.vibration.lines.iter().map(|l| l.mode).collect();
         assert_eq!((modes[0], modes.len()), (ModeKind::Flap, 4), "{}", demo.name);
@@ -84,6 +90,79 @@ fn a_job_without_a_material_is_judged_in_the_usual_one_and_told() {
         sheet.assumptions
     );
     assert!(sheet.hub.is_none());
+}
+
+/// What was not judged is told, and keeps a blade from being called within its limits.
+#[test]
+fn what_was_not_judged_is_told_and_is_not_called_held() {
+    let whole = demo(0);
+    let found = |job: &Job| {
+        let told = sheet(job).verdict;
+        assert_eq!(told, verdict(&Rig::new(job).unwrap()).unwrap());
+        told
+    };
+    let missing = |job: &Job, part: &str| {
+        let told = found(job);
+        assert_eq!(told.finding, Finding::HeldAsFarAsJudged, "{part}: {}", told.sentence);
+        assert!(told.missing.iter().any(|m| m.contains(part)), "{part}: {:?}", told.missing);
+        assert!(told.warning().is_some_and(|w| w.contains(part)) && told.sentence.contains("Not judged"));
+        let said = sheet(job).governing.unwrap().sentence;
+        assert!(said.contains("as far as judged") && said.contains(part), "{said}");
+    };
+    let mut job = whole.clone();
+    job.engine = None;
+    missing(&job, "the job has no engine");
+    missing(&job, "“Climb”");
+    let mut job = whole.clone();
+    job.aircraft = None;
+    missing(&job, "“Cruise”");
+    let mut job = whole.clone();
+    job.wood.as_mut().unwrap().hub = None;
+    missing(&job, "bolts and boss");
+    let mut job = whole.clone();
+    job.wood.as_mut().unwrap().hub.as_mut().unwrap().bolt_torque_n_m = None;
+    missing(&job, "bolt_torque_n_m");
+    let mut job = whole.clone();
+    job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: 0.0 };
+    missing(&job, "the root in its hub");
+    let mut job = whole;
+    job.flight_points.truncate(1);
+    (job.flight_points[0].airspeed_m_s, job.flight_points[0].setting) = (Some(50.0), Setting::Level {});
+    (job.engine, job.aircraft) = (None, None);
+    let told = found(&job);
+    assert_eq!((told.finding, told.margin), (Finding::NotJudged, None), "{}", told.sentence);
+}
+
+/// A margin is limit over stress less 1 wherever it is said.
+#[test]
+fn a_margin_is_said_in_one_way() {
+    let mut job = with(|_| {});
+    job.propeller.stations.iter_mut().for_each(|s| s.thickness_ratio *= 0.75);
+    let sheet = sheet(&job);
+    let g = sheet.governing.as_ref().unwrap();
+    let said = format!("margin −{:.0} %", -100.0 * (g.limit_pa / g.stress_pa - 1.0));
+    assert_eq!(sheet.verdict.finding, Finding::OverTheLimit);
+    assert!(g.sentence.contains(&said), "{said}: {}", g.sentence);
+    assert!(sheet.verdict.sentence.contains(&said) && sheet.verdict.broken[0].contains(&said));
+    // The thickness that is missing is the same in words and in the table, at the edge of the hub as well.
+    for s in sheet.stations.iter().filter(|s| s.margin.unwrap() < -0.01) {
+        let mm = 1e3 * s.thicker_m.unwrap();
+        assert!((10.0 * mm - (10.0 * mm).round()).abs() < 1e-6, "{mm}");
+        let words = s.station.map(|n| format!("{mm:.1} mm at station {n}"));
+        assert!(words.is_none_or(|w| g.sentence.contains(&w)), "{}", g.sentence);
+    }
+}
+
+#[test]
+fn holes_that_a_boss_cannot_hold_are_over_the_limit() {
+    let mut job = demo(0);
+    job.propeller.hub_diameter_m = 0.005;
+    let sheet = sheet(&job);
+    let (hub, verdict) = (sheet.hub.unwrap(), sheet.verdict);
+    // Six bolts of 8 mm on a circle of 100 mm reach 54 mm; of a radius of 2.5 mm 2 % stay as a wall.
+    assert!((hub.past_boss_m.unwrap() - (0.054 - 0.98 * 0.0025)).abs() < 1e-12 && hub.margin < -0.9);
+    assert_eq!(verdict.finding, Finding::OverTheLimit);
+    assert!(verdict.broken.iter().any(|b| b.contains("holes reach past")), "{:?}", verdict.broken);
 }
 
 #[test]

@@ -2,11 +2,11 @@
 
 use crate::job::Job;
 
-use super::drilling::Pattern;
 use super::error::{BenchError, Fault};
 use super::form::Form;
 use super::loft::{Boss, blade_rings, root_radius_m};
 use super::ring::Ring;
+use crate::drilling::Pattern;
 
 /// Thickest lamination proposed where the job names no number, m: common practice is 12 to 20 mm.
 const THICKEST_LAMINATION_M: f64 = 0.020;

@@ -26,7 +26,7 @@ impl Bench {
     #[must_use]
     pub fn sheets(&self, paper: Paper, unit: Unit) -> Vec<Sheet> {
         let title = if self.job.title.is_empty() { "Propeller" } else { &self.job.title };
-        lay(title, &leaves(self, paper, unit), paper)
+        lay(title, &leaves(self, paper, unit), paper, self.warning().as_deref())
     }
 }
 

@@ -21,6 +21,8 @@ const HEAD_MM: f64 = 9.0;
 const FOOT_MM: f64 = 28.0;
 /// From line to line of the cautions, mm.
 const CAUTION_MM: f64 = 3.1;
+/// Size of a warning's letters, mm.
+const WARNING_MM: f64 = 3.0;
 /// By how much neighbouring sheets show the same, mm.
 const OVERLAP_MM: f64 = 12.0;
 /// Between parts side by side, mm.
@@ -91,14 +93,20 @@ pub struct Leaf {
 }
 
 /// Lays leaves on paper, one after the other, each over as many sheets as it needs; every sheet says `title`, its name and its
-/// number.
+/// number, and above the cautions what must be warned of.
 #[must_use]
-pub fn lay(title: &str, leaves: &[Leaf], paper: Paper) -> Vec<Sheet> {
+pub fn lay(title: &str, leaves: &[Leaf], paper: Paper, warning: Option<&str>) -> Vec<Sheet> {
     let mut sheets: Vec<Sheet> = leaves.iter().flat_map(|leaf| laid(leaf, paper)).collect();
     let of = sheets.len();
     for (i, sheet) in sheets.iter_mut().enumerate() {
         furniture(sheet, title, &format!("sheet {} of {of}, {}", i + 1, paper.name()));
-        ruler(&mut sheet.frame, [MARGIN_MM, MARGIN_MM + CAUTION_MM * CAUTIONS.len() as f64 + 1.0]);
+        let above = MARGIN_MM + CAUTION_MM * CAUTIONS.len() as f64;
+        ruler(&mut sheet.frame, [MARGIN_MM, above + 1.0]);
+        if let Some(words) = warning {
+            let room = paper.size_mm()[0] - 2.0 * MARGIN_MM;
+            let at = [MARGIN_MM, above + 6.4];
+            sheet.frame.bold(at, WARNING_MM, Anchor::Start, fitted(words, 1.08 * WARNING_MM, room));
+        }
     }
     sheets
 }
@@ -254,7 +262,7 @@ fn ruler(frame: &mut Drawing, [x, y]: [f64; 2]) {
         Anchor::Start,
         "This bar is 100 mm (3.937 in). Measure it before you cut.",
     );
-    frame.text([x + 104.0, y + 4.0], 2.6, Anchor::Start, "Print at 100 %, never fitted to the page.");
+    frame.text([x + 104.0, y + 2.9], 2.6, Anchor::Start, "Print at 100 %, never fitted to the page.");
 }
 
 /// A text cut to a room.

@@ -8,9 +8,9 @@ use std::f64::consts::{PI, TAU};
 
 use earcut::Earcut;
 
-use super::drilling::Hole;
 use super::loft::Boss;
 use super::solid::Solid;
+use crate::drilling::Hole;
 
 /// Sides of a hole and of the circle round all holes.
 const HOLE_SIDES: u32 = 48;

@@ -1,17 +1,20 @@
 //! A job made ready for the bench: what every sheet and file is drawn from.
 
 use std::f64::consts::TAU;
+use std::sync::OnceLock;
 
 use crate::job::{Job, Rotation};
+use crate::result::Verdict;
 use crate::rig::Rig;
+use crate::wood;
 
 use super::blank::{Blank, Heights};
-use super::drilling::Pattern;
 use super::error::{BenchError, Fault};
 use super::form::Form;
 use super::loft::{loft, root_radius_m};
 use super::ring::Ring;
 use super::solid::Solid;
+use crate::drilling::Pattern;
 
 /// How far (m) a section may pass the faces of the boss where it enters it.
 const BOSS_SLACK_M: f64 = 2e-4;
@@ -50,6 +53,7 @@ pub struct Bench {
     pub rings: Vec<Ring>,
     /// Stations between hub and tip.
     pub stations: Vec<Carved>,
+    verdict: OnceLock<Result<Verdict, String>>,
 }
 
 impl Bench {
@@ -70,7 +74,7 @@ impl Bench {
         let blank = Blank::new(job, &form)?;
         let rings = loft(&form, blank.boss);
         let mut faults = faults(&rings, &blank);
-        faults.extend(Pattern::of(job).and_then(|p| p.fault(&form)));
+        faults.extend(drilled_past_boss(job, &form));
         if !faults.is_empty() {
             return Err(BenchError(faults));
         }
@@ -92,7 +96,20 @@ impl Bench {
                 }
             })
             .collect();
-        Ok(Self { job: job.clone(), form, blank, rings, stations })
+        Ok(Self { job: job.clone(), form, blank, rings, stations, verdict: OnceLock::new() })
+    }
+
+    /// What must be said of the blade's strength on every sheet that it is made from; worked out once, when it is first asked for.
+    #[must_use]
+    pub fn warning(&self) -> Option<String> {
+        let judged = self.verdict.get_or_init(|| {
+            let rig = Rig::new(&self.job).map_err(|e| e.to_string())?;
+            wood::verdict(&rig).map_err(|e| e.to_string())
+        });
+        match judged {
+            Ok(verdict) => verdict.warning(),
+            Err(why) => Some(format!("STRENGTH NOT JUDGED: {why}")),
+        }
     }
 
     /// 1 where the leading edge is to the right of a section seen from the tip, −1 where it is to the left.
@@ -139,6 +156,16 @@ impl Bench {
         let angle = self.form.blade.cut(r).angle_rad;
         (angle, TAU * r * angle.tan())
     }
+}
+
+fn drilled_past_boss(job: &Job, form: &Form) -> Option<Fault> {
+    let pattern = Pattern::of(job).filter(|_| form.one_piece)?;
+    let [reach_mm, hub_mm] = [pattern.reach_m(), form.blade.hub_radius_m].map(|m| 1e3 * m);
+    pattern.past_boss_m(form.blade.hub_radius_m).map(|past_m| Fault::DrilledPastBoss {
+        reach_mm,
+        hub_mm,
+        by_mm: 1e3 * past_m,
+    })
 }
 
 /// The sides of the blade in plan at a station, m: those of the surface, within which its own section lies.

@@ -95,7 +95,7 @@ fn off(carved: &Carved, length: Scale) -> Chart {
         x: axis("radius", length),
         y: axis("difference", READ),
         curves: carved.blades.iter().take(MOST_CURVES).map(curve).collect(),
-        limit: None,
+        limits: Vec::new(),
     }
 }
 

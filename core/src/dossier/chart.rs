@@ -51,8 +51,8 @@ pub(super) struct Chart {
     pub(super) y: Axis,
     /// At most [`MOST_CURVES`].
     pub(super) curves: Vec<Curve>,
-    /// A line right across at a value, with its name.
-    pub(super) limit: Option<(String, f64)>,
+    /// Lines right across at a value, with their names, at most as many as [`LIMITS`].
+    pub(super) limits: Vec<(String, f64)>,
 }
 
 impl Curve {
@@ -76,14 +76,14 @@ impl Chart {
         let mut drawing = Drawing::default();
         let known: Vec<&Curve> = self.curves.iter().filter(|c| c.known().count() > 1).collect();
         let names: Vec<&str> =
-            known.iter().map(|c| c.name.as_str()).chain(self.limit.iter().map(|l| l.0.as_str())).collect();
+            known.iter().map(|c| c.name.as_str()).chain(self.limits.iter().map(|l| l.0.as_str())).collect();
         let key = places(&names, wide);
         let key_mm = KEY_MM * key.last().map_or(0.0, |k| 1.0 + k[1]);
         let low = [LEFT_MM, -(tall - BELOW_MM - key_mm)];
         let high = [wide - RIGHT_MM, -ABOVE_MM];
         drawing.bold([0.0, -3.5], 2.9, Anchor::Start, fitted(&self.title, 2.9 * 1.08, wide));
         let of = |k: usize, scale: &Scale| {
-            let limit = self.limit.iter().filter(|_| k == 1).map(|l| l.1);
+            let limit = self.limits.iter().filter(|_| k == 1).map(|l| l.1);
             let all = known.iter().flat_map(|c| c.known()).map(|p| p[k]).chain(limit);
             Ticks::over(all.map(|v| v * scale.per_si))
         };
@@ -98,12 +98,15 @@ impl Chart {
             runs.filter(|run| run.len() > 1)
                 .for_each(|run| drawing.line(layer, run.iter().map(|p| place(*p)).collect::<Vec<_>>()));
         }
-        if let Some((_, value)) = &self.limit {
+        for ((name, value), layer) in self.limits.iter().zip(LIMITS) {
             let y = place([0.0, *value])[1];
-            drawing.line(LIMIT, [[low[0], y], [high[0], y]]);
+            drawing.line(layer, [[low[0], y], [high[0], y]]);
+            if self.limits.len() > 1 {
+                drawing.text([high[0], y + 0.6], SIZE_MM, Anchor::End, name.as_str());
+            }
         }
         for (i, (name, at)) in names.iter().zip(&key).enumerate() {
-            let layer = if i < known.len() { STROKES[i] } else { LIMIT };
+            let layer = if i < known.len() { STROKES[i] } else { LIMITS[i - known.len()] };
             let at = [at[0], low[1] - BELOW_MM - KEY_MM * (at[1] + 0.5)];
             drawing.line(layer, [at, [at[0] + SAMPLE_MM, at[1]]]);
             let room = wide - at[0] - SAMPLE_MM - 1.5;
@@ -138,8 +141,8 @@ impl Chart {
     }
 }
 
-/// How a limit is drawn.
-const LIMIT: Layer = Layer::Datum;
+/// How limits are drawn.
+const LIMITS: [Layer; 2] = [Layer::Datum, Layer::Ruler];
 
 fn named(axis: &Axis) -> String {
     if axis.scale.sign.is_empty() {
@@ -214,7 +217,13 @@ mod tests {
     fn chart(points: Vec<[f64; 2]>) -> Chart {
         let axis = |words, sign| Axis { words, scale: Scale::fixed(sign, 1.0, 0) };
         let curves = vec![Curve { name: "one".into(), points }];
-        Chart { title: "Of".into(), x: axis("speed", "m/s"), y: axis("force", "N"), curves, limit: None }
+        Chart {
+            title: "Of".into(),
+            x: axis("speed", "m/s"),
+            y: axis("force", "N"),
+            curves,
+            limits: Vec::new(),
+        }
     }
 
     #[test]

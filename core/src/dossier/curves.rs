@@ -47,7 +47,7 @@ fn as_drawn(told: &Told) -> Vec<Chart> {
         x: axis("radius", length),
         y,
         curves,
-        limit: None,
+        limits: Vec::new(),
     };
     vec![
         chart(
@@ -75,7 +75,7 @@ fn by_point(told: &Told, title: &str, y: &Axis, of: fn(&StationResult) -> Option
         x: axis("radius", told.scales.length()),
         y: y.clone(),
         curves: curves.to_vec(),
-        limit: None,
+        limits: Vec::new(),
     };
     curves.chunks(MOST_CURVES - 1).map(chart).collect()
 }
@@ -114,7 +114,7 @@ fn over_speed(told: &Told) -> Vec<Chart> {
         x: axis("true airspeed", scales.speed),
         y,
         curves: curves.into_iter().map(curve).collect(),
-        limit: None,
+        limits: Vec::new(),
     };
     let limit = told.rig.shaft.as_ref().and_then(crate::engine::Shaft::limit_rpm);
     let full = |of: Of| ("full throttle", 0.0, of);
@@ -124,7 +124,7 @@ fn over_speed(told: &Told) -> Vec<Chart> {
         axis("rpm", Scale { sign: "", ..RPM }),
         vec![full(|p| Some(p.full.as_ref()?.rpm)), level(|p| Some(p.level.as_ref()?.rpm))],
     );
-    rpm.limit = limit.map(|rpm| ("limit".into(), rpm));
+    rpm.limits = limit.map(|rpm| ("limit".into(), rpm)).into_iter().collect();
     vec![
         chart(
             "Thrust of all propellers and what level flight asks",
@@ -163,7 +163,7 @@ fn coefficients(told: &Told) -> Vec<Chart> {
         x: axis("advance ratio", Scale { decimals: Some(2), ..PLAIN }),
         y: axis(y, PLAIN),
         curves,
-        limit: None,
+        limits: Vec::new(),
     };
     vec![
         chart("Efficiency", "efficiency", vec![curve("efficiency", |p| p.coefficients.efficiency)]),

@@ -6,6 +6,8 @@ use crate::job::{
     Species,
 };
 
+use crate::wood::is_wood;
+
 use super::Told;
 use super::flow::Flow;
 use super::scale::{DEGREES, NONE, PERCENT, PLAIN, RPM, Scales};
@@ -72,7 +74,8 @@ fn propeller(told: &Told) -> Vec<(&'static str, String)> {
             Species::Named(name) => name.replace('-', " "),
             Species::Own(own) => own.name.clone(),
         };
-        facts.push(("made of", format!("{name}, {} % moisture", wood.moisture_percent)));
+        let moisture = format!(", {} % moisture", wood.moisture_percent);
+        facts.push(("made of", if is_wood(wood) { name + &moisture } else { name }));
     }
     facts
 }
@@ -129,7 +132,7 @@ fn piston(flow: &mut Flow, p: &Piston, scales: &Scales) {
         crate::job::AltitudeLaw::NaturallyAspirated => "naturally aspirated: Gagg and Ferrar's law".into(),
         crate::job::AltitudeLaw::HeldTo(held) => format!("held up to {}", scales.height.say(held.altitude_m)),
     };
-    let fuel = p.bsfc_kg_per_kwh.map_or_else(String::new, |b| format!("{b} kg/kWh"));
+    let fuel = p.bsfc_kg_per_kwh.map_or_else(String::new, |b| scales.consumption(b));
     flow.facts(&[
         ("kind", "piston engine by its full-throttle curve".into()),
         ("engine rpm over propeller rpm", p.gear_ratio.to_string()),
@@ -190,16 +193,20 @@ fn points(flow: &mut Flow, told: &Told) {
             scales.height.figure(p.altitude_m),
             DEGREES.signed(p.isa_offset_k),
             speed,
-            setting(&p.setting, scales),
+            setting(&p.setting, told),
         ]
     };
     flow.table(&columns, &told.rig.job.flight_points.iter().map(row).collect::<Vec<_>>());
 }
 
-fn setting(setting: &Setting, scales: &Scales) -> String {
+fn setting(setting: &Setting, told: &Told) -> String {
+    let scales = told.scales;
     match setting {
         Setting::FullThrottle {} => "full throttle".into(),
-        Setting::Level {} => "level flight, thrust equals drag".into(),
+        Setting::Level {} => match told.rig.job.aircraft {
+            Some(Aircraft::Multirotor(_)) => "thrust carries the weight and the drag".into(),
+            _ => "level flight, thrust equals drag".into(),
+        },
         Setting::Rpm { rpm } => RPM.say(*rpm),
         Setting::Power { power_w } => format!("{} of shaft power", scales.power.say(*power_w)),
         Setting::Throttle { fraction } => format!("{} of full throttle", PLAIN.figure(*fraction)),

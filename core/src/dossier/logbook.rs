@@ -72,7 +72,7 @@ fn residuals(logged: &Logged) -> Chart {
         x: axis("reading", Scale::fixed("", 1.0, 0)),
         y: axis("rpm", Scale { sign: "", ..RPM }),
         curves: vec![curve("without the factors", |l| l.before_rpm), curve("with them", |l| l.after_rpm)],
-        limit: None,
+        limits: Vec::new(),
     }
 }
 

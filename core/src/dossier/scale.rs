@@ -140,6 +140,13 @@ impl Scales {
         fuel: Scale::three("lb/h", 1.0 / POUND_KG),
     };
 
+    /// Fuel for the work done (kg/kWh) with its units.
+    #[must_use]
+    pub fn consumption(&self, kg_per_kwh: f64) -> String {
+        let value = kg_per_kwh * self.fuel.per_si / (1e3 * self.power.per_si);
+        format!("{value:.3} {} for each {}", self.fuel.sign, self.power.sign)
+    }
+
     /// Lengths on the blade, of m.
     #[must_use]
     pub fn length(&self) -> Scale {
@@ -191,5 +198,8 @@ mod tests {
         {
             assert!((scale.per_si * si - 1.0).abs() < 1e-6, "{scale:?}");
         }
+        // 1 lb/(hp h) is 0.608 277 kg/kWh.
+        assert_eq!(of.consumption(0.608_277), "1.000 lb/h for each hp");
+        assert_eq!(Scales::METRIC.consumption(0.3), "0.300 kg/h for each kW");
     }
 }

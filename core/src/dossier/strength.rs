@@ -3,6 +3,8 @@
 use crate::bench::sheet::table::{figures, words};
 use crate::result::{CaseResult, FrequencyLine, HubResult, ModeKind, Strength, StressStation};
 
+use crate::wood::{Say, sentence};
+
 use super::Told;
 use super::chart::{Chart, Curve, MOST_CURVES};
 use super::curves::axis;
@@ -18,10 +20,13 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     let scales = told.scales;
     flow.part("Strength");
     flow.facts(&material(s, scales));
-    flow.text(&s.governing.as_ref().map_or_else(
-        || "No flight point has an answer: no load is known.".into(),
-        |g| format!("{} That limit is {}.", g.sentence, g.reason),
-    ));
+    flow.text(&s.verdict.sentence);
+    if let Some(g) = &s.governing {
+        let (stress, length) = (|pa: f64| scales.stress.say(pa), |m: f64| scales.length().say(m));
+        let say = Say { stress: &stress, length: &length };
+        let limit = limit(scales, g.limit_pa, &g.reason);
+        flow.text(&format!("{} That limit is {limit}.", sentence(g, &s.stations, &s.verdict, &say)));
+    }
     stations(flow, s, scales);
     let charts: Vec<Chart> = [stress(s, scales), frequencies(s)].into_iter().filter(Chart::shows).collect();
     flow.charts(&charts);
@@ -29,12 +34,13 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     cases(flow, s, scales);
     let near = s.vibration.near.iter().map(|n| {
         format!(
-            "{}: {} {} at {:.0} Hz is {} from {} a turn{}.",
+            "{}: {} {} at {:.0} Hz is {} {} {} a turn{}.",
             n.case,
             n.number,
             n.mode.words(),
             n.hz,
             PERCENT.say(n.away.abs()),
+            if n.away < 0.0 { "below" } else { "above" },
             n.order,
             if n.of_engine { " of the engine" } else { "" }
         )
@@ -56,17 +62,11 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
 
 fn material(s: &Strength, scales: &Scales) -> Vec<(&'static str, String)> {
     let (m, mass) = (&s.material, &s.mass);
+    let moisture = if m.is_wood { format!(", {} % moisture", m.moisture_percent) } else { String::new() };
     let assumed = if m.assumed { ", a usual one, for the job names none" } else { "" };
-    // A reason begins with the limit in MPa.
-    let limit = |pa: f64, reason: &str| match scales.stress.sign {
-        "MPa" => reason.to_string(),
-        _ => format!("{}; {reason}", scales.stress.say(pa)),
-    };
+    let limit = |pa: f64, reason: &str| limit(scales, pa, reason);
     vec![
-        (
-            "material",
-            format!("{}{assumed}; {:.0} kg/m³, {} % moisture", m.name, m.density_kg_m3, m.moisture_percent),
-        ),
+        ("material", format!("{}{assumed}; {:.0} kg/m³{}", m.name, m.density_kg_m3, moisture)),
         ("values from", m.source.clone()),
         ("most tension", limit(m.tension_limit_pa, &m.tension_reason)),
         ("most compression", limit(m.compression_limit_pa, &m.compression_reason)),
@@ -81,6 +81,14 @@ fn material(s: &Strength, scales: &Scales) -> Vec<(&'static str, String)> {
             ),
         ),
     ]
+}
+
+/// How a limit came about: a reason begins with the limit in megapascals.
+fn limit(scales: &Scales, pa: f64, reason: &str) -> String {
+    match scales.stress.sign {
+        "MPa" => reason.to_string(),
+        _ => format!("{}; {reason}", scales.stress.say(pa)),
+    }
 }
 
 fn stations(flow: &mut Flow, s: &Strength, scales: &Scales) {
@@ -172,7 +180,10 @@ fn stress(s: &Strength, scales: &Scales) -> Chart {
             curve("compression", |s| s.compression_pa),
             curve("by turning alone", |s| s.axial_pa),
         ],
-        limit: Some(("compression limit".into(), s.material.compression_limit_pa)),
+        limits: vec![
+            ("most tension".into(), s.material.tension_limit_pa),
+            ("most compression".into(), s.material.compression_limit_pa),
+        ],
     }
 }
 
@@ -192,7 +203,7 @@ fn frequencies(s: &Strength) -> Chart {
         x: axis("propeller rpm", Scale { sign: "", ..RPM }),
         y: axis("frequency", Scale::fixed("Hz", 1.0, 0)),
         curves: s.vibration.lines.iter().take(MOST_CURVES).map(curve).collect(),
-        limit: None,
+        limits: Vec::new(),
     }
 }
 
@@ -209,6 +220,11 @@ fn of_hub(h: &HubResult, scales: &Scales) -> Vec<(&'static str, String)> {
         ("pull of a blade", scales.force.say(h.pull_n)),
         ("tension through the boss", against(h.boss_tension_pa, h.boss_limit_pa)),
         ("pressure under the plates", against(h.clamp_pa, h.clamp_limit_pa)),
-        ("least margin", PERCENT.say(h.margin)),
+        (
+            "holes past what the boss can hold",
+            h.past_boss_m.map_or_else(String::new, |m| scales.length().say(m)),
+        ),
+        ("torque of a bolt that reaches it", scales.torque.say(h.most_bolt_torque_n_m)),
+        ("least margin", format!("{} (limit over stress, less 1)", PERCENT.say(h.margin))),
     ]
 }

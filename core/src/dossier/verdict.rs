@@ -20,7 +20,7 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     flow.part("Verdict");
     points(flow, &briefs(told.rig), told.scales, None);
     let mut said: Vec<String> = told.points.iter().map(departure).collect();
-    said.extend(told.strength.iter().filter_map(|s| Some(s.governing.as_ref()?.sentence.clone())));
+    said.extend(told.strength.iter().map(|s| s.verdict.sentence.clone()));
     said.extend(told.envelope.iter().flat_map(|e| range(e, told)));
     flow.list(&said);
 }
@@ -120,9 +120,10 @@ fn range(e: &Envelope, told: &Told) -> Vec<String> {
     }
     if let Some(t) = crate::fit::take_off(told.rig, e) {
         said.push(format!(
-            "Take-off on level hard ground without wind: {} of roll, {} to a height of 15 m.",
+            "Take-off on level hard ground without wind: {} of roll, {} to a height of {}.",
             s.height.say(t.ground_roll_m),
-            s.height.say(t.distance_to_15_m)
+            s.height.say(t.distance_to_15_m),
+            s.height.say(15.0)
         ));
     }
     if let Some(v) = m.limit_rpm_from_m_s {

@@ -2,7 +2,7 @@
 
 use serde::Serialize;
 
-use super::State;
+use super::{State, Verdict};
 
 /// All that is known of the strength of a job's blade.
 #[derive(Clone, Debug, PartialEq, Serialize)]
@@ -19,7 +19,9 @@ pub struct Strength {
     pub cases: Vec<CaseResult>,
     /// Stress and margin at the edge of the hub and at the stations, each under the case that is worst there.
     pub stations: Vec<StressStation>,
-    /// What decides; none where no case has an answer.
+    /// Whether blade and hub hold, and what was not judged.
+    pub verdict: Verdict,
+    /// What decides of the blade; none where no case has an answer.
     pub governing: Option<Governing>,
     /// Natural frequencies and what they meet.
     pub vibration: Vibration,
@@ -40,7 +42,9 @@ pub struct MaterialUsed {
     pub assumed: bool,
     /// Where the values come from.
     pub source: String,
-    /// Moisture content, percent of the dry weight.
+    /// Whether it is wood: only then moisture, grain and knots count.
+    pub is_wood: bool,
+    /// Moisture content, percent of the dry weight; of no account where it is not wood.
     pub moisture_percent: f64,
     /// Density, kg/m³.
     pub density_kg_m3: f64,
@@ -209,7 +213,7 @@ pub struct StressStation {
     pub kind: Option<StressKind>,
     /// Least margin: limit over stress, less 1.
     pub margin: Option<f64>,
-    /// Thickness that is missing at this station, m, so that every margin comes to nothing with all that is missing elsewhere, the blade's own weight
+    /// Thickness that is missing here, m, rounded up to a tenth of a millimetre, so that every margin comes to nothing with all that is missing elsewhere, the blade's own weight
     /// and stiffness taken into account, the air's load as it is; none where nothing is missing or twice the thickness does not do.
     pub thicker_m: Option<f64>,
 }
@@ -233,7 +237,7 @@ pub struct Governing {
     pub reason: String,
     /// Limit over stress, less 1; below zero the blade is over the limit.
     pub margin: f64,
-    /// In one sentence: what holds, or what would restore the margin.
+    /// In words: what holds as far as it was judged, or what would restore the margin; margins are limit over stress, less 1.
     pub sentence: String,
 }
 
@@ -357,6 +361,8 @@ pub struct HubResult {
     pub most_bolt_torque_n_m: f64,
     /// Torque that friction of one plate carries over the greatest torque; none where no bolt torque is given.
     pub friction_share: Option<f64>,
-    /// Least margin of those above that apply: limit over stress, less 1.
+    /// How much farther the holes reach than the boss can hold, m; none where they fit.
+    pub past_boss_m: Option<f64>,
+    /// Least margin of those above that apply: limit over stress, less 1; where the holes do not fit, the boss's radius over the one they need, less 1, too.
     pub margin: f64,
 }

@@ -1,6 +1,7 @@
 //! What was taken for granted of a job, in sentences.
 
-use super::{BladeBeam, Doubt};
+use super::{BladeBeam, Doubt, Kind, Species as Known};
+use crate::job::Species;
 use crate::result::CaseResult;
 use crate::rig::Rig;
 
@@ -10,10 +11,7 @@ pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> 
     if rig.job.wood.is_none() {
         all.push(format!("The job names no material (wood.species): {} is taken.", beam.material.title));
     }
-    all.push(format!(
-        "Values: {}. Grain straight and along the blade, no knots, glue as strong as the wood.",
-        beam.material.source
-    ));
+    all.push(format!("Values: {}. {}", beam.material.source, sound(rig)));
     all.push(format!("{} The blade is clamped at the edge of the hub.", stands(beam)));
     all.push(
         "Steady load only, without gyroscopic load, gust, engine pulse or strike. Bending is what is left when centrifugal force has pulled \
@@ -31,6 +29,24 @@ pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> 
         silent.map(|c| format!("“{}” has no answer and is not in it. {}", c.name, c.state.sentence())),
     );
     all
+}
+
+/// What is taken for granted of the material, by what it is.
+fn sound(rig: &Rig) -> &'static str {
+    let kind = rig.job.wood.as_ref().map(|wood| match &wood.species {
+        Species::Named(name) => Known::named(name).map(|s| s.kind),
+        Species::Own(_) => None,
+    });
+    match kind {
+        None | Some(Some(Kind::Hardwood | Kind::Softwood)) => {
+            "Grain straight and along the blade, no knots, glue as strong as the wood."
+        }
+        Some(Some(Kind::Composite)) => "Fibres straight and along the blade, soaked through, without voids.",
+        Some(Some(Kind::Plastic)) => {
+            "Without voids or seams; of a print, layers along the blade, for it is far weaker across them."
+        }
+        Some(None) => "The same everywhere in the blade, without flaws.",
+    }
 }
 
 /// Where the centroids stand.

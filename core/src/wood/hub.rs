@@ -6,6 +6,7 @@
 use std::f64::consts::PI;
 
 use super::BladeBeam;
+use crate::drilling::Pattern;
 use crate::job::Hub;
 use crate::result::HubResult;
 
@@ -21,6 +22,7 @@ pub(super) fn hub(
     beam: &BladeBeam,
     hub: &Hub,
     boss_diameter_m: f64,
+    holes: Option<Pattern>,
     torque_n_m: f64,
     pull_n: f64,
 ) -> HubResult {
@@ -34,7 +36,9 @@ pub(super) fn hub(
     let force = |torque: f64| torque / (NUT_FACTOR * hub.bolt_diameter_m);
     let clamp_pa = hub.bolt_torque_n_m.map(|t| bolts * force(t) / area_m2);
     let friction = |t: f64| FRICTION * bolts * force(t) * friction_radius_m(hub) / torque_n_m.abs().max(1e-9);
+    let past_boss_m = holes.and_then(|p| p.past_boss_m(0.5 * boss_diameter_m));
     let margins = [
+        past_boss_m.map(|past| 0.5 * boss_diameter_m / (0.5 * boss_diameter_m + past)),
         Some(crushing.limit_pa / bearing_pa.max(1.0)),
         boss_tension_pa.map(|pa| beam.material.tension.limit_pa / pa.max(1.0)),
         clamp_pa.map(|pa| steady_pa / pa.max(1.0)),
@@ -49,6 +53,7 @@ pub(super) fn hub(
         boss_limit_pa: beam.material.tension.limit_pa,
         clamp_pa,
         clamp_limit_pa: steady_pa,
+        past_boss_m,
         most_bolt_torque_n_m: steady_pa * area_m2 / bolts * NUT_FACTOR * hub.bolt_diameter_m,
         friction_share: hub.bolt_torque_n_m.map(friction),
         margin: margins.into_iter().flatten().fold(f64::INFINITY, f64::min) - 1.0,
@@ -59,7 +64,7 @@ pub(super) fn hub(
 /// and where the holes leave nothing.
 fn boss_tension_pa(beam: &BladeBeam, hub: &Hub, boss_diameter_m: f64, pull_n: f64) -> Option<f64> {
     let holes = hub.bore_m + if hub.bolts > 1 { 2.0 * hub.bolt_diameter_m } else { 0.0 };
-    let area_m2 = hub.thickness_m * (boss_diameter_m.max(hub.flange_diameter_m) - holes);
+    let area_m2 = hub.thickness_m * (boss_diameter_m - holes);
     (beam.blades <= 2 && area_m2 > 0.0).then(|| pull_n / area_m2)
 }
 

@@ -96,6 +96,16 @@ pub fn material(wood: &Wood) -> Result<Material, WoodError> {
     Ok(m)
 }
 
+/// Whether a job's material is known to be wood, which takes up moisture and has grain.
+pub(crate) fn is_wood(wood: &Wood) -> bool {
+    match &wood.species {
+        Named::Own(_) => false,
+        Named::Named(name) => {
+            Species::named(name).is_none_or(|s| matches!(s.kind, Kind::Hardwood | Kind::Softwood))
+        }
+    }
+}
+
 fn known_material(s: &Species, wood: &Wood) -> Material {
     let moisture = wood.moisture_percent;
     let wet = |[dry, green]: [f64; 2]| 1e6 * at_moisture(dry, green, s.meets_percent, moisture);

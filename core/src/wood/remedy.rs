@@ -3,8 +3,9 @@
 use super::judged::{Loaded, worst};
 use super::material::{Material, Strength};
 use super::stress::{Carried, Stresses};
+use super::verdict::{percent, place};
 use super::{BladeBeam, Place};
-use crate::result::{Governing, StressKind, StressStation};
+use crate::result::{Finding, Governing, StressKind, StressStation, Verdict};
 use crate::rig::Rig;
 
 /// Most thickness over the drawn one that is tried.
@@ -96,7 +97,6 @@ pub(super) fn governing(stations: &[StressStation], material: &Material) -> Opti
         StressKind::Compression => (worst.compression_pa?, &material.compression),
         StressKind::Shear => (worst.shear_pa?, &material.shear),
     };
-    let sentence = sentence(stations, worst, kind, stress_pa, limit.limit_pa, margin, &case);
     Some(Governing {
         case,
         station: worst.station,
@@ -106,41 +106,61 @@ pub(super) fn governing(stations: &[StressStation], material: &Material) -> Opti
         limit_pa: limit.limit_pa,
         reason: limit.reason.clone(),
         margin,
-        sentence,
+        sentence: String::new(),
     })
 }
 
-fn sentence(
-    all: &[StressStation],
-    s: &StressStation,
-    kind: StressKind,
-    stress_pa: f64,
-    limit_pa: f64,
-    margin: f64,
-    case: &str,
-) -> String {
-    let place = s.station.map_or_else(|| "the edge of the hub".into(), |n| format!("station {n}"));
+/// How stresses (Pa) and lengths (m) are said.
+#[derive(Clone, Copy)]
+pub struct Say<'f> {
+    /// A stress with its unit.
+    pub stress: &'f dyn Fn(f64) -> String,
+    /// A length on the blade with its unit.
+    pub length: &'f dyn Fn(f64) -> String,
+}
+
+impl Say<'_> {
+    /// Megapascals and millimetres.
+    pub const METRIC: Self =
+        Self { stress: &|pa| format!("{:.1} MPa", pa / 1e6), length: &|m| format!("{:.1} mm", 1e3 * m) };
+}
+
+/// What decides of a blade in words: what holds as far as it was judged, or what would restore the margin.
+#[must_use]
+pub fn sentence(g: &Governing, stations: &[StressStation], verdict: &Verdict, say: &Say) -> String {
     let figures = format!(
-        "{} {:.1} MPa at {place} (radius {:.0} mm) in “{case}” against {:.1} MPa",
-        kind.word(),
-        stress_pa / 1e6,
-        1e3 * s.radius_m,
-        limit_pa / 1e6
+        "{} {} at {} (radius {}) in “{}” where {} is the limit",
+        g.kind.word(),
+        (say.stress)(g.stress_pa),
+        place(g),
+        (say.length)(g.radius_m),
+        g.case,
+        (say.stress)(g.limit_pa)
     );
-    if margin >= 0.0 {
-        return format!("Within the limits, least at {figures}: {:.0} % in hand.", 100.0 * margin);
+    let margin = percent(g.margin);
+    if g.margin < 0.0 {
+        return format!("Over the limit, margin {margin}: {figures}. {}", restored(stations, say));
     }
-    let over = 100.0 * (stress_pa / limit_pa - 1.0);
-    format!("Over the limit by {over:.0} %: {figures}. {}", restored(all))
+    match verdict.finding {
+        Finding::Held => format!("Within the limits: margin {margin}, least of the blade at {figures}."),
+        Finding::OverTheLimit => {
+            format!(
+                "The blade is within its limits, its hub is not: {}. Margin of the blade {margin}, at {figures}.",
+                verdict.broken.join("; ")
+            )
+        }
+        _ => format!(
+            "Within the limits as far as judged: margin {margin}, least of the blade at {figures}. Not judged: {}.",
+            verdict.missing.join("; ")
+        ),
+    }
 }
 
 /// What would restore every margin.
-fn restored(all: &[StressStation]) -> String {
+fn restored(all: &[StressStation], say: &Say) -> String {
     let missing: Vec<String> = all
         .iter()
-        .filter_map(|s| {
-            Some(format!("{:.1} mm at station {}", (1e4 * s.thicker_m?).ceil() / 10.0, s.station?))
-        })
+        .filter_map(|s| Some(format!("{} at station {}", (say.length)(s.thicker_m?), s.station?)))
         .collect();
     if missing.is_empty() {
         return "Even twice the thickness does not restore it: fewer revolutions, more chord or a stronger material would.".into();

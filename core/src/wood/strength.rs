@@ -3,47 +3,96 @@
 use super::assumptions::assumptions;
 use super::cases::{Case, cases};
 use super::judged::{Loaded, worst};
-use super::remedy::{Nearest, governing, remedy};
-use super::{BladeBeam, Place, WoodError, hub, mass, twist, vibration};
+use super::material::is_wood;
+use super::remedy::{Nearest, Say, governing, remedy, sentence};
+use super::{BladeBeam, Place, WoodError, hub, mass, twist, verdict, vibration};
+use crate::drilling::Pattern;
 use crate::engine::Shaft;
 use crate::fit::rpm_of;
-use crate::job::VERSION;
-use crate::result::{CaseFigures, CaseResult, HubResult, MaterialUsed, Strength, StressStation};
+use crate::job::{PitchControl, VERSION, Wood};
+use crate::result::{CaseFigures, CaseResult, HubResult, MaterialUsed, Strength, StressStation, Verdict};
 use crate::rig::Rig;
+
+/// A job's blade under all its cases.
+pub(super) struct Judged {
+    beam: BladeBeam,
+    wood: Wood,
+    cases: Vec<(Case, Option<Loaded>)>,
+    stations: Vec<StressStation>,
+}
+
+impl Judged {
+    /// # Errors
+    /// A species that is not known.
+    pub(super) fn new(rig: &Rig) -> Result<Self, WoodError> {
+        let beam = BladeBeam::new(rig)?;
+        let wood = rig.job.wood.clone().unwrap_or_default();
+        let all = cases(rig, wood.overspeed).into_iter();
+        let cases: Vec<(Case, Option<Loaded>)> =
+            all.map(|case| (case.clone(), Loaded::new(rig, &beam, &case))).collect();
+        let answered: Vec<&Loaded> = cases.iter().filter_map(|j| j.1.as_ref()).collect();
+        let stations = beam.places.iter().map(|p| station(&beam, p, &answered)).collect();
+        Ok(Self { beam, wood, cases, stations })
+    }
+
+    fn answered(&self) -> Vec<&Loaded> {
+        self.cases.iter().filter_map(|j| j.1.as_ref()).collect()
+    }
+
+    fn results(&self) -> Vec<CaseResult> {
+        self.cases.iter().map(|(case, loaded)| result(&self.beam, case, loaded.as_ref())).collect()
+    }
+
+    fn hub(&self, rig: &Rig) -> Option<HubResult> {
+        self.wood.hub.as_ref().and_then(|h| hub_result(rig, &self.beam, h, &self.answered()))
+    }
+
+    pub(super) fn verdict(&self, rig: &Rig) -> Verdict {
+        let decides = governing(&self.stations, &self.beam.material);
+        verdict::of(rig, &self.results(), decides.as_ref(), self.hub(rig).as_ref())
+    }
+
+    /// Writes down the thickness that is missing at each place.
+    fn add_missing(&mut self, rig: &Rig) {
+        let Some(thicker_m) = remedy(rig, &self.beam, &self.answered()) else { return };
+        for (station, place) in self.stations.iter_mut().zip(&self.beam.places) {
+            // The edge of the hub has the thickness ratio of the station next to it.
+            let chords = station.chord_m / rig.job.propeller.stations[place.of].chord_m;
+            let tenths = (1e4 * thicker_m[place.of] * chords - 1e-6).ceil();
+            station.thicker_m = Some(1e-4 * tenths).filter(|m| *m > 0.0);
+        }
+    }
+}
 
 /// Strength, weight and vibration of a job's blade; without a material of the job's the usual one is taken and said.
 ///
 /// # Errors
 /// A species that is not known.
 pub fn strength(rig: &Rig) -> Result<Strength, WoodError> {
-    let beam = BladeBeam::new(rig)?;
-    let wood = rig.job.wood.clone().unwrap_or_default();
-    let judged: Vec<(Case, Option<Loaded>)> = cases(rig, wood.overspeed)
-        .into_iter()
-        .map(|case| (case.clone(), Loaded::new(rig, &beam, &case)))
-        .collect();
-    let answered: Vec<&Loaded> = judged.iter().filter_map(|j| j.1.as_ref()).collect();
-    let mut stations: Vec<StressStation> = beam.places.iter().map(|p| station(&beam, p, &answered)).collect();
-    if let Some(thicker_m) = remedy(rig, &beam, &answered) {
-        for (station, place) in stations.iter_mut().zip(&beam.places).filter(|s| s.1.station.is_some()) {
-            station.thicker_m = Some(thicker_m[place.of]).filter(|m| *m > 0.0);
-        }
-    }
-    let case_results: Vec<CaseResult> =
-        judged.iter().map(|(case, loaded)| result(&beam, case, loaded.as_ref())).collect();
+    let mut judged = Judged::new(rig)?;
+    judged.add_missing(rig);
+    let (cases, hub) = (judged.results(), judged.hub(rig));
+    let answered = judged.answered();
     let speeds: Vec<(String, f64)> = answered.iter().map(|l| (l.name.clone(), l.at.rotation_rad_s)).collect();
+    let beam = &judged.beam;
+    let mut governing = governing(&judged.stations, &beam.material);
+    let verdict = verdict::of(rig, &cases, governing.as_ref(), hub.as_ref());
+    if let Some(g) = &mut governing {
+        g.sentence = sentence(g, &judged.stations, &verdict, &Say::METRIC);
+    }
     Ok(Strength {
         spokeshave: VERSION,
         title: rig.job.title.clone(),
-        material: material_used(rig, &beam, wood.moisture_percent),
-        mass: mass(&beam),
-        governing: governing(&stations, &beam.material),
-        vibration: vibration::vibration(&beam, &speeds, rig.shaft.as_ref().map_or(1.0, Shaft::gear_ratio)),
-        running: (0..rig.job.flight_points.len()).filter_map(|i| twist::running(rig, &beam, i)).collect(),
-        hub: wood.hub.as_ref().and_then(|h| hub_result(rig, &beam, h, &answered)),
-        assumptions: assumptions(rig, &beam, &case_results),
-        cases: case_results,
-        stations,
+        material: material_used(rig, beam, judged.wood.moisture_percent),
+        mass: mass(beam),
+        verdict,
+        governing,
+        vibration: vibration::vibration(beam, &speeds, rig.shaft.as_ref().map_or(1.0, Shaft::gear_ratio)),
+        running: (0..rig.job.flight_points.len()).filter_map(|i| twist::running(rig, beam, i)).collect(),
+        hub,
+        assumptions: assumptions(rig, beam, &cases),
+        cases,
+        stations: judged.stations,
     })
 }
 
@@ -117,8 +166,10 @@ fn hub_result(rig: &Rig, beam: &BladeBeam, hub: &crate::job::Hub, cases: &[&Load
         .iter()
         .map(|c| c.air.torque_n_m.abs())
         .fold(None, |m: Option<f64>, t| Some(m.map_or(t, |m| m.max(t))))?;
+    let one_piece = matches!(rig.job.propeller.pitch_control, PitchControl::Fixed {});
+    let holes = Pattern::of(&rig.job).filter(|_| one_piece);
     let pull = cases.iter().map(|c| c.loads.tension_n[0]).fold(0.0, f64::max);
-    Some(hub::hub(beam, hub, 2.0 * rig.rotor.blade.hub_radius_m, torque, pull))
+    Some(hub::hub(beam, hub, 2.0 * rig.rotor.blade.hub_radius_m, holes, torque, pull))
 }
 
 fn material_used(rig: &Rig, beam: &BladeBeam, moisture_percent: f64) -> MaterialUsed {
@@ -127,6 +178,7 @@ fn material_used(rig: &Rig, beam: &BladeBeam, moisture_percent: f64) -> Material
         name: m.title.clone(),
         assumed: rig.job.wood.is_none(),
         source: m.source.clone(),
+        is_wood: rig.job.wood.as_ref().is_none_or(is_wood),
         moisture_percent,
         density_kg_m3: m.density_kg_m3,
         modulus_pa: m.modulus_pa,

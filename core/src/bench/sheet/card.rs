@@ -1,18 +1,20 @@
 //! The job card: one page with all that the bench must know.
 
 use crate::bench::draw::{Anchor, Drawing, Layer};
-use crate::bench::drilling::Pattern;
 use crate::bench::page::{Leaf, fitted, wrapped};
 use crate::bench::stock::{Stock, name};
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
+use crate::drilling::Pattern;
 use crate::job::Rotation;
 
 use super::hub::pattern_words;
 use super::table::lines;
 use super::template::datum_mm;
 
-/// Most and least that is left until both cards meet, m, and the share of the thinnest station that is.
+/// Size of a warning's letters, mm.
+const WARNING_MM: f64 = 3.4;
+/// Least and most that is left until both cards meet, m, and the share of the thinnest station that is.
 const LEFT_M: [f64; 2] = [1e-4, 1e-3];
 const LEFT_SHARE: f64 = 0.25;
 
@@ -20,7 +22,14 @@ pub(super) fn leaf(bench: &Bench, unit: Unit, room: [f64; 2]) -> Leaf {
     let mut drawing = Drawing::default();
     drawing.bold([0.0, -6.0], 6.0, Anchor::Start, fitted(&bench.job.title, 6.5, room[0]));
     drawing.line(Layer::Thin, [[0.0, -9.0], [room[0], -9.0]]);
-    let mut y = -14.0;
+    let mut y = -12.0;
+    if let Some(warning) = bench.warning() {
+        for line in wrapped(&warning, 1.08 * WARNING_MM, room[0]) {
+            drawing.bold([0.0, y - WARNING_MM], WARNING_MM, Anchor::Start, line);
+            y -= 1.4 * WARNING_MM;
+        }
+    }
+    y -= 2.0;
     for (heading, facts) in groups(bench, unit) {
         drawing.bold([0.0, y - 4.0], 3.6, Anchor::Start, heading);
         y -= 7.0;

@@ -1,10 +1,10 @@
 //! The hub's drilling, full size.
 
 use crate::bench::draw::{Anchor, Drawing, Layer};
-use crate::bench::drilling::Pattern;
 use crate::bench::page::Leaf;
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
+use crate::drilling::Pattern;
 
 use super::table::lines;
 

@@ -53,6 +53,9 @@ pub(super) fn made_ready(rig: &Rig) -> Result<Bench, Stop> {
 pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     let bench = made_ready(rig)?;
     args.out.write(&files(&bench, args.out.unit()).map_err(Stop::bad)?)?;
+    if let Some(warning) = bench.warning() {
+        print(&format!("\n{warning}"))?;
+    }
     print(&format!("\nBefore you act: {}", CAUTIONS.join(" ")))?;
     Ok(true)
 }

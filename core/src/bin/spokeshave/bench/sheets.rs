@@ -52,6 +52,9 @@ impl From<UnitName> for Unit {
 pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     let bench = made_ready(rig)?;
     args.out.write(&sheet_files(&bench, args.paper.into(), args.out.unit()))?;
+    if let Some(warning) = bench.warning() {
+        print(&format!("\n{warning}"))?;
+    }
     print(&format!(
         "\nPrint at 100 %, never fitted to the page; measure the 100 mm bar on every sheet.\nBefore you act: {}",
         CAUTIONS.join(" ")

@@ -12,6 +12,7 @@ pub(super) fn sheet(s: &Strength) -> String {
         || "No flight point has an answer: no load is known.".into(),
         |g| format!("{}\nThat limit is {}.", g.sentence, g.reason),
     );
+    let decides = format!("{}\n{decides}", s.verdict.sentence);
     let mut parts = vec![material(&s.material), decides, stations(&s.stations), cases(&s.cases)];
     parts.push(vibration(&s.vibration));
     if !s.running.is_empty() {
@@ -38,14 +39,14 @@ fn percent(share: Option<f64>) -> String {
 }
 
 fn material(m: &MaterialUsed) -> String {
+    let moisture = if m.is_wood { format!(", at {} % moisture", m.moisture_percent) } else { String::new() };
     let assumed = if m.assumed { " (taken: the job names none)" } else { "" };
     format!(
-        "{}{assumed}, {} kg/m³, E {} GPa, G {} GPa, at {} % moisture",
+        "{}{assumed}, {} kg/m³, E {} GPa, G {} GPa{moisture}",
         m.name,
         figure(Some(m.density_kg_m3), 0),
         figure(Some(m.modulus_pa / 1e9), 2),
-        figure(Some(m.shear_modulus_pa / 1e9), 2),
-        m.moisture_percent
+        figure(Some(m.shear_modulus_pa / 1e9), 2)
     )
 }
 
@@ -78,7 +79,9 @@ fn stations(all: &[StressStation]) -> String {
             s.kind.zip(s.case.as_ref()).map(|(k, case)| format!("{}, {case}", k.word())).unwrap_or_default(),
         ]
     };
-    table(&header, all.iter().map(row).collect())
+    let said =
+        "Margin: limit over stress, less 1. Missing: thickness that would bring every margin to nothing.";
+    format!("{}\n{said}", table(&header, all.iter().map(row).collect()))
 }
 
 fn cases(all: &[CaseResult]) -> String {
@@ -213,6 +216,7 @@ fn hub(h: &HubResult) -> String {
             String::new(),
         ),
         ("friction of one plate over the greatest torque", figure(h.friction_share, 2), String::new()),
+        ("holes past what the boss can hold, mm", figure(h.past_boss_m.map(|m| 1e3 * m), 1), String::new()),
         ("least margin, %", percent(Some(h.margin)), String::new()),
     ];
     let rows = rows.map(|(what, value, limit)| vec![what.into(), value, limit]);

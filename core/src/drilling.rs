@@ -1,7 +1,5 @@
 //! The hub's drilling: the job's own pattern or a standard flange.
 
-use super::error::Fault;
-use super::form::Form;
 use crate::job::{Flange, Job};
 
 /// Holes to drill, lengths in m.
@@ -86,10 +84,9 @@ impl Pattern {
         self.holes().iter().map(far).fold(0.0, f64::max)
     }
 
-    /// What keeps it from being drilled into a form's boss.
-    pub(super) fn fault(&self, form: &Form) -> Option<Fault> {
-        let (hub_mm, reach_mm) = (1e3 * form.blade.hub_radius_m, 1e3 * self.reach_m());
-        let by_mm = reach_mm - (1.0 - LEAST_WALL) * hub_mm;
-        (form.one_piece && by_mm > 0.0).then_some(Fault::DrilledPastBoss { reach_mm, hub_mm, by_mm })
+    /// How much farther the holes reach than a boss of that radius can hold, m; `None` where they fit.
+    #[must_use]
+    pub fn past_boss_m(&self, boss_radius_m: f64) -> Option<f64> {
+        Some(self.reach_m() - (1.0 - LEAST_WALL) * boss_radius_m).filter(|past| *past > 0.0)
     }
 }
