@@ -119,7 +119,11 @@ fn the_list_is_up_to_date() {
     for file in list::files() {
         let path = Path::new(env!("CARGO_MANIFEST_DIR")).join(file.name);
         let committed = std::fs::read_to_string(&path).unwrap_or_default();
-        let stale = differences(&committed, &file.text, file.name.ends_with(".svg"));
+        let stale = differences(
+            &committed,
+            &file.text,
+            std::path::Path::new(&file.name).extension().is_some_and(|end| end == "svg"),
+        );
         assert!(
             stale.is_empty(),
             "tests/{} is stale: run `{}`\n{}",

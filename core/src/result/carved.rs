@@ -210,9 +210,9 @@ impl CarvedStrength {
         let drawn = self.drawn_margin.map_or_else(String::new, |m| format!("; {:.0} % as drawn", 100.0 * m));
         if self.margin < 0.0 {
             format!(
-                "Not strong enough: blade {} carries {:.0} % too much in the case {}{drawn}. Do not run it.",
+                "Not strong enough: blade {} has a margin of {:.0} % in the case {}{drawn}. Do not run it.",
                 self.blade,
-                100.0 * (1.0 / (1.0 + self.margin) - 1.0),
+                100.0 * self.margin,
                 self.case
             )
         } else {

@@ -9,11 +9,11 @@ mod stations;
 
 use std::rc::Rc;
 
-use spokeshave::result::Strength;
+use spokeshave::result::{Finding, Strength};
 use yew::prelude::*;
 
 use super::{Seen, caution};
-use crate::number::{fixed, with_unit};
+use crate::number::{signed, with_unit};
 use crate::results::Sheet;
 use crate::state::State;
 use crate::units::Quantity;
@@ -44,16 +44,14 @@ pub fn same_bench(a: &State, b: &State) -> bool {
 pub fn in_a_line(state: &State, sheet: Option<&Sheet>) -> String {
     let Some(Ok(sheet)) = sheet else { return "stress and margin, weight, twist and vibration".into() };
     let mass = with_unit(state.units, Quantity::Mass, Some(sheet.mass.blades_kg));
-    let margin = sheet.governing.as_ref().map_or_else(
-        || "no load known".into(),
-        |g| {
-            if g.margin < 0.0 {
-                format!("over the limit by {} %", fixed(100.0 * (g.stress_pa / g.limit_pa - 1.0), 0))
-            } else {
-                format!("{} % in hand", fixed(100.0 * g.margin, 0))
-            }
-        },
-    );
+    let verdict = &sheet.verdict;
+    let margin = verdict.margin.map_or_else(String::new, |m| format!("{} %", signed(100.0 * m, 0)));
+    let margin = match verdict.finding {
+        Finding::Held => format!("holds, margin {margin}"),
+        Finding::HeldAsFarAsJudged => format!("holds as far as judged, margin {margin}"),
+        Finding::OverTheLimit => format!("not strong enough, margin {margin}"),
+        Finding::NotJudged => "not judged, no load known".into(),
+    };
     format!("{}: {margin}; blades {mass}", sheet.material.name)
 }
 
@@ -98,13 +96,10 @@ fn told(state: &Seen, sheet: &Strength) -> Html {
     }
 }
 
-/// What decides, in a sentence, with the reason of the limit.
+/// Whether it holds and what was not judged, then what decides with the reason of its limit.
 fn decides(sheet: &Strength) -> Html {
-    let Some(g) = &sheet.governing else {
-        return html! { <p class="note">{ "No flight point has an answer, so that no load is known." }</p> };
-    };
-    let class = if g.margin < 0.0 { "decides over" } else { "decides" };
-    html! {
-        <p {class} role="status">{ &g.sentence }<small>{ format!("That limit is {}.", g.reason) }</small></p>
-    }
+    let over = matches!(sheet.verdict.finding, Finding::OverTheLimit | Finding::NotJudged);
+    let class = if over { "decides over" } else { "decides" };
+    let reason = sheet.governing.as_ref().map(|g| format!("{} That limit is {}.", g.sentence, g.reason));
+    html! { <p {class} role="status">{ &sheet.verdict.sentence }<small>{ reason }</small></p> }
 }

@@ -10,7 +10,7 @@ use yew::prelude::*;
 
 use super::figures::{better, name, told};
 use crate::app::{RigRef, Same};
-use crate::number::{NO_FIGURE, fixed, signed, with_unit};
+use crate::number::{NO_FIGURE, signed, with_unit};
 use crate::state::{Action, Beside, Variant};
 use crate::units::{Quantity, Units};
 use crate::view::{Seen, use_act};
@@ -76,7 +76,7 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
             <table class="sheet-table blades">
                 <thead><tr>
                     <th scope="col">{ "Blade" }</th><th scope="col">{ "Diameter" }</th><th scope="col">{ "Pitch" }</th>
-                    <th scope="col">{ "Strength in hand" }<small>{ "of the wood named" }</small></th>
+                    <th scope="col">{ "Margin of strength" }<small>{ "of the wood named" }</small></th>
                     { for heads }<th scope="col"><span class="unseen">{ "What to do" }</span></th>
                 </tr></thead>
                 <tbody>
@@ -109,13 +109,9 @@ fn figures(row: &Row, aims: &[Aim], drawn: Option<&[Option<f64>]>, units: Units)
 }
 
 fn strength(margin: Option<f64>) -> String {
-    match margin {
-        Some(m) if m < 0.0 => {
-            format!("not strong enough: stress × {} of the limit", fixed(1.0 / (1.0 + m), 2))
-        }
-        Some(m) => format!("{}\u{a0}%", fixed(100.0 * m, 0)),
-        None => NO_FIGURE.into(),
-    }
+    let Some(margin) = margin else { return NO_FIGURE.into() };
+    let said = format!("{}\u{a0}%", signed(100.0 * margin, 0));
+    if margin < 0.0 { format!("not strong enough: {said}") } else { said }
 }
 
 #[derive(Properties, PartialEq)]
