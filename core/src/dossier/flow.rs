@@ -18,6 +18,10 @@ const GAP_MM: f64 = 8.0;
 /// Height of a chart, mm.
 const CHART_MM: f64 = 66.0;
 
+/// Rows up to which a table is not divided, and the least of a part.
+const WHOLE_ROWS: usize = 14;
+const LEAST_ROWS: usize = 3;
+
 /// Pages being filled.
 pub(super) struct Flow {
     room: [f64; 2],
@@ -130,9 +134,15 @@ impl Flow {
         let head = head_mm(columns);
         let mut rest = rows;
         while !rest.is_empty() {
-            self.need(head + ROW_MM * rest.len().min(3) as f64);
-            let fit = ((self.left_mm() - head) / ROW_MM) as usize;
-            let (now, then) = rest.split_at(fit.clamp(1, rest.len()));
+            // A short table stays whole.
+            let together = if rest.len() <= WHOLE_ROWS { rest.len() } else { LEAST_ROWS };
+            self.need(head + ROW_MM * together as f64);
+            let fit = (((self.left_mm() - head) / ROW_MM) as usize).clamp(1, rest.len());
+            // No stray row on the next page.
+            let over = rest.len() - fit;
+            let fit =
+                if over > 0 && over < LEAST_ROWS && fit > LEAST_ROWS { fit + over - LEAST_ROWS } else { fit };
+            let (now, then) = rest.split_at(fit);
             self.y -= table(&mut self.page, [0.0, self.y], columns, now) + 3.0;
             rest = then;
         }

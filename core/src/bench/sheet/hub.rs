@@ -60,13 +60,20 @@ pub(super) fn pattern_words(bench: &Bench, unit: Unit) -> String {
 
 fn words(bench: &Bench, unit: Unit) -> Vec<String> {
     let boss = unit.say(2.0 * bench.form.blade.hub_radius_m);
-    let mut words = vec![format!("boss {boss} across, seen from ahead"), pattern_words(bench, unit)];
+    let thick = bench.blank.boss.map_or(0.0, |b| b.faces_m[1] - b.faces_m[0]);
+    let mut words = vec![
+        format!("boss {boss} across, {} thick, seen from ahead", unit.say(thick)),
+        format!("{}; dash-dotted: that circle", pattern_words(bench, unit)),
+    ];
     let Some(p) = Pattern::of(&bench.job) else { return words };
     words.push(if p.bore_m > 0.0 {
         format!("centre hole {}", unit.say(p.bore_m))
     } else {
         "centre hole to suit your own hub".into()
     });
+    if let Some(plates_m) = p.flange_m {
+        words.push(format!("dashed: the plates, {} across", unit.say(plates_m)));
+    }
     words.push(
         "Lay this sheet on your own flange before you drill; turn the pattern as your engine needs.".into(),
     );

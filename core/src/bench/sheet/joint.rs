@@ -1,7 +1,7 @@
 //! How the boards of three and more blades meet in the hub: lapped, as is common practice.
 //!
 //! In every lamination one blade's board runs through the hub (two boards that face one another, where the number of blades is even); the others butt against
-//! its sides, and against one another half way between them. The next lamination is turned on by one blade, so that no joint lies over another.
+//! its sides, and against one another half way between them. The next lamination is turned on by one blade, so that no joint lies over the one below it.
 
 use std::f64::consts::TAU;
 
@@ -127,7 +127,7 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
             180.0 / f64::from(n)
         ));
     }
-    words.push("Every lamination is turned on by one blade against the one below it, so that no joint lies over another.".into());
+    words.push("Every lamination is turned on by one blade against the one below it, so that no joint lies over the one below it.".into());
     words.push("Glue both faces of every board, and clamp them between plates while the glue sets.".into());
     let least = if n.is_multiple_of(2) { n / 2 } else { n };
     if (layers as u32) < least {

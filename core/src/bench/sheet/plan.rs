@@ -37,7 +37,7 @@ pub(super) fn leaf(bench: &Bench, unit: Unit, room: [f64; 2]) -> Leaf {
             drawing.text([half - 1.5, y + 1.2], SIZE_MM, Anchor::End, label);
         }
     }
-    words(&mut drawing, bench, two, half);
+    words(&mut drawing, bench, half);
     Leaf { name: "Blank from ahead".into(), drawing }
 }
 
@@ -47,7 +47,14 @@ fn label(station: &Carved, unit: Unit) -> String {
 
 /// The blade in plan, from the axis where hub and two blades are one piece, else from where it stands free of the hub.
 fn outline(drawing: &mut Drawing, bench: &Bench, two: bool) {
-    let from = if two { 0.0 } else { root_m(bench) };
+    let hub = bench.form.blade.hub_radius_m;
+    let from = if two {
+        0.0
+    } else if bench.blank.boss.is_some() {
+        hub
+    } else {
+        root_m(bench)
+    };
     let side = |axis_end: usize| {
         let rings = bench.rings.iter().filter(move |r| r.radius_m >= from);
         // Seen from ahead: the other way round than from the tip.
@@ -63,21 +70,22 @@ fn outline(drawing: &mut Drawing, bench: &Bench, two: bool) {
     drawing.line(Layer::Cut, points);
 }
 
-fn words(drawing: &mut Drawing, bench: &Bench, two: bool, half: f64) {
+fn words(drawing: &mut Drawing, bench: &Bench, half: f64) {
     let ahead = if bench.hand() > 0.0 { -1.0 } else { 1.0 };
     let y = 1e3 * bench.form.blade.radius_m;
     let near = |side: f64| if side < 0.0 { Anchor::Start } else { Anchor::End };
     let said = |drawing: &mut Drawing, side: f64, text: &str, y: f64| {
+        let text = if breadth_mm(text, 2.6) < 0.9 * half { text } else { &text[..2] };
         if breadth_mm(text, 2.6) < 0.9 * half {
             drawing.text([side * (half - 1.5), y], 2.6, near(side), text);
         }
     };
-    said(drawing, ahead, "leading edge side", 0.55 * y);
-    said(drawing, -ahead, "trailing edge side", 0.55 * y - 8.0);
-    let below = if two {
-        "for the other blade turn the sheet half a turn about the axis"
-    } else {
-        "one for each blade"
+    said(drawing, ahead, "LE: leading edge side", 0.55 * y);
+    said(drawing, -ahead, "TE: trailing edge side", 0.55 * y - 8.0);
+    let below = match bench.form.blade.count {
+        1 => "blade and hub in one piece",
+        2 => "for the other blade turn the sheet half a turn about the axis",
+        _ => "one for each blade; dashed: the boss",
     };
     if bench.blank.boss.is_some() && breadth_mm(below, 2.4) < 1.9 * half {
         let low = -1e3 * bench.form.blade.hub_radius_m - 1e3 * bench.blank.allowance_m;

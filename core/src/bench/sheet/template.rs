@@ -93,17 +93,21 @@ fn drawn(bench: &Bench, station: &Carved, side: Side, unit: Unit) -> Drawing {
     let anchor = if to_middle > 0.0 { Anchor::Start } else { Anchor::End };
     let widest = words.iter().map(|w| breadth_mm(w, 1.08)).fold(0.1, f64::max);
     let largest = (0.62 * (trail_x - lead_x).abs() / widest).clamp(SMALLEST_MM, LARGEST_MM);
-    let block =
-        |size: f64| written(&words, [at + to_middle, y + inward * (MARK_MM + 0.5)], inward, anchor, size);
-    let steps = (0..20).map(|k| largest - 0.1 * f64::from(k)).take_while(|size| *size >= SMALLEST_MM);
-    let size = steps.into_iter().find(|size| clear_of_wood(&block(*size), &card, side));
-    drawing.items.extend(block(size.unwrap_or(SMALLEST_MM)).into_iter().map(Item::Text));
+    let block = |size: f64, lines: usize| {
+        written(&words[..lines], [at + to_middle, y + inward * (MARK_MM + 0.5)], inward, anchor, size)
+    };
+    let sizes = (0..20).map(|k| largest - 0.1 * f64::from(k)).take_while(|size| *size >= SMALLEST_MM);
+    // Fewer words rather than smaller ones: angles stand in the table as well.
+    let all = (1..=words.len()).rev().flat_map(|lines| sizes.clone().map(move |size| (size, lines)));
+    let clear = all.into_iter().find(|(size, lines)| clear_of_wood(&block(*size, *lines), &card, side));
+    let (size, lines) = clear.unwrap_or((SMALLEST_MM, 1));
+    drawing.items.extend(block(size, lines).into_iter().map(Item::Text));
     drawing
 }
 
 /// Sizes of the letters on a card, mm.
 const LARGEST_MM: f64 = 3.0;
-const SMALLEST_MM: f64 = 1.5;
+const SMALLEST_MM: f64 = 2.2;
 
 /// Lines of words from a datum edge inward, the first one on top and bold.
 fn written(words: &[String], [x, y]: [f64; 2], inward: f64, anchor: Anchor, size_mm: f64) -> Vec<Text> {
@@ -166,16 +170,18 @@ pub(super) fn leaves(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<Leaf> {
     let head = 1.5 * NOTE_MM * note.len() as f64 + 3.0;
     let mut shelves: Vec<Shelf> = Vec::new();
     for station in &bench.stations {
-        place(&mut shelves, &pair(bench, station, unit), room[0]);
+        for side in [Side::Upper, Side::Lower] {
+            place(&mut shelves, &drawn(bench, station, side, unit), room[0]);
+        }
     }
     let mut pages: Vec<(f64, Vec<Shelf>)> = Vec::new();
     for shelf in shelves {
-        match pages.last_mut() {
-            Some((used, on)) if *used + shelf.height + GAP_MM <= room[1] => {
+        match pages.iter_mut().find(|(used, _)| *used + shelf.height + GAP_MM <= room[1]) {
+            Some((used, on)) => {
                 *used += shelf.height + GAP_MM;
                 on.push(shelf);
             }
-            _ => pages.push((head + shelf.height, vec![shelf])),
+            None => pages.push((head + shelf.height, vec![shelf])),
         }
     }
     let of = pages.len();
