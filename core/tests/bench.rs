@@ -350,7 +350,11 @@ fn all_text_stays_on_its_sheet_and_apart() {
     for job in [demo(0), demo(1), demo(2), inches, wide].into_iter().chain(blades) {
         let bench = bench(&job).unwrap();
         for (paper, unit) in [(Paper::A4, Unit::Millimetre), (Paper::Letter, Unit::Inch)] {
-            bench.sheets(paper, unit).iter().for_each(words_apart);
+            let sheets = bench.sheets(paper, unit);
+            sheets.iter().for_each(words_apart);
+            let items = sheets.iter().flat_map(|s| s.views.iter().flat_map(|v| &v.drawing.items));
+            let sizes = items.filter_map(|i| if let Item::Text(t) = i { Some(t.size_mm) } else { None });
+            assert!(sizes.fold(f64::INFINITY, f64::min) >= 2.2, "letters that cannot be read in a shop");
         }
     }
 }

@@ -72,16 +72,19 @@ fn outline(drawing: &mut Drawing, bench: &Bench, two: bool) {
 
 fn words(drawing: &mut Drawing, bench: &Bench, half: f64) {
     let ahead = if bench.hand() > 0.0 { -1.0 } else { 1.0 };
-    let y = 1e3 * bench.form.blade.radius_m;
-    let near = |side: f64| if side < 0.0 { Anchor::Start } else { Anchor::End };
-    let said = |drawing: &mut Drawing, side: f64, text: &str, y: f64| {
-        let text = if breadth_mm(text, 2.6) < 0.9 * half { text } else { &text[..2] };
-        if breadth_mm(text, 2.6) < 0.9 * half {
-            drawing.text([side * (half - 1.5), y], 2.6, near(side), text);
+    // Between two stations, clear of their lines.
+    let middle = bench.stations.len() / 2;
+    let radius =
+        |i: usize| bench.stations.get(i).map_or(0.5 * bench.form.blade.radius_m, |s| s.heights.radius_m);
+    let y = 500.0 * (radius(middle.saturating_sub(1)) + radius(middle)) - 1.0;
+    for (side, text) in [(ahead, "LE: leading edge side"), (-ahead, "TE: trailing edge side")] {
+        let anchor = if side < 0.0 { Anchor::Start } else { Anchor::End };
+        if breadth_mm(text, 2.6) < 0.4 * half {
+            drawing.text([side * (half - 1.5), y], 2.6, anchor, text);
+        } else if breadth_mm(&text[..2], 2.6) < 0.9 * half {
+            drawing.text([0.35 * side * half, y], 2.6, Anchor::Middle, &text[..2]);
         }
-    };
-    said(drawing, ahead, "LE: leading edge side", 0.55 * y);
-    said(drawing, -ahead, "TE: trailing edge side", 0.55 * y - 8.0);
+    }
     let below = match bench.form.blade.count {
         1 => "blade and hub in one piece",
         2 => "for the other blade turn the sheet half a turn about the axis",
