@@ -50,7 +50,10 @@ pub struct File {
 /// The list and its pictures.
 #[must_use]
 pub fn files() -> Vec<File> {
-    let mut files = vec![File { name: "validation.md", text: text() }];
+    let mut files = vec![
+        File { name: "validation.md", text: text() },
+        File { name: "validation/summary.tsv", text: for_the_page() },
+    ];
     files.extend(plots::all().map(|(name, text)| File { name, text }));
     files
 }
@@ -97,6 +100,13 @@ fn summary(text: &mut String) {
     for (part, all, miss) in counts() {
         let _ = writeln!(text, "| {part} | {all} | {} | {miss} |", all - miss);
     }
+}
+
+/// What the page tells of the list: a row for each part, then one for each reason of misses.
+fn for_the_page() -> String {
+    let rows = counts().map(|(part, all, miss)| format!("{part}\t{all}\t{}\n", all - miss));
+    let misses = told_misses().into_iter().map(|(reason, all)| format!("{}\t{reason}\n", all.join("; ")));
+    rows.chain(misses).collect()
 }
 
 /// Reasons of known misses, each with all that misses for it.
