@@ -1,7 +1,6 @@
 //! The answer of a flight point from that of a propeller a little different, which saves looking over the whole range.
 
 use super::full::Full;
-use super::settle::Met;
 use super::top_near::TopNear;
 use super::trail::Trail;
 use super::{Solver, condition, top_speed};
@@ -51,27 +50,20 @@ pub fn answer(rig: &Rig, point: &FlightPoint, air: Air, near: &mut Near) -> Resu
             Ok((*near.top.insert(top).full()).into())
         }
         Setting::FullThrottle {} => {
-            let mut trail = near.trail.newest();
-            let full = solver.full(&at, &mut trail)?;
+            let mut trail = std::mem::take(&mut near.trail);
+            let full = solver.full(&at, &mut trail);
             near.trail = trail.newest();
-            Ok(full.into())
+            full.map(Answer::from)
         }
         Setting::Level {} => {
             let met = solver.level_by_thrust(&at, &near.trail)?;
-            near.keep(&met);
+            near.trail.push(&met);
+            near.trail = std::mem::take(&mut near.trail).newest();
             Ok(Answer { condition: met.condition, loads: met.loads, held: false })
         }
         Setting::Rpm { .. } | Setting::Power { .. } | Setting::Throttle { .. } => {
             let condition = condition(rig, point, air)?;
             Ok(Answer { condition, loads: rig.rotor.loads(&condition), held: false })
         }
-    }
-}
-
-impl Near {
-    fn keep(&mut self, met: &Met) {
-        let mut trail = Trail::default();
-        trail.push(met);
-        self.trail = trail;
     }
 }

@@ -37,9 +37,9 @@ impl Trail {
         Self { trusted: past.len() == MOST, past, ..Self::default() }
     }
 
-    /// The last answer alone: a guess for another propeller at the same speed.
-    pub(super) fn newest(&self) -> Self {
-        Self { past: self.past.first().copied().into_iter().collect(), ..Self::default() }
+    /// The last answer alone with what is known of the elements: a guess for another propeller at the same speed.
+    pub(super) fn newest(self) -> Self {
+        Self { past: self.past.into_iter().take(1).collect(), elements: self.elements, ..Self::default() }
     }
 
     /// The last answer.

@@ -47,7 +47,7 @@ impl Library {
         let entry = self.entry(name)?;
         let off = |n: f64| (n - n_crit).abs();
         let (n, set) = entry.by_n.iter().min_by(|a, b| off(a.0).total_cmp(&off(b.0)))?;
-        set.get_or_init(|| one_set(&entry.packed, *n).map(Arc::new)).as_ref()
+        set.get_or_init(|| one_set(entry, *n).map(Arc::new)).as_ref()
     }
 
     /// Whether a family's outline is known.
@@ -59,9 +59,7 @@ impl Library {
     /// The outline of a family at a thickness ratio, where the family has one and it can be drawn that thick.
     #[must_use]
     pub fn outline(&self, name: &str, thickness_ratio: f64) -> Option<Outline> {
-        let entry = self.entry(name)?;
-        let base = entry.outline.get_or_init(|| Outline::read(&entry.packed.outline).ok()).as_ref()?;
-        base.scaled_to(thickness_ratio).ok()
+        self.entry(name)?.outline(thickness_ratio)
     }
 
     /// Title of a family.
@@ -95,12 +93,33 @@ fn entry(packed: PackedFamily) -> Entry {
     Entry { packed, by_n, outline: OnceLock::new() }
 }
 
-fn one_set(packed: &PackedFamily, n: f64) -> Option<Family> {
+/// Thickness ratios past those of the tables at which the face angle is measured: roots are that thick.
+const ROOTS: [f64; 4] = [0.3, 0.4, 0.5, 0.6];
+
+impl Entry {
+    /// The outline at a thickness ratio.
+    fn outline(&self, thickness_ratio: f64) -> Option<Outline> {
+        let base = self.outline.get_or_init(|| Outline::read(&self.packed.outline).ok()).as_ref()?;
+        base.scaled_to(thickness_ratio).ok()
+    }
+
+    /// Angle from the flat face to the chord line by thickness ratio, as far as the section can be drawn.
+    fn face_angles_deg(&self) -> Vec<(f64, f64)> {
+        let mut angles = self.packed.face_angle_deg.clone();
+        let Some(&(thickest, _)) = angles.last() else { return angles };
+        let measured = |t: &f64| Some((*t, self.outline(*t)?.face_angle_rad()?.to_degrees()));
+        angles.extend(ROOTS.iter().filter(|t| **t > thickest).filter_map(measured));
+        angles
+    }
+}
+
+fn one_set(entry: &Entry, n: f64) -> Option<Family> {
+    let packed = &entry.packed;
     let about = About {
         name: packed.name.clone(),
         title: packed.title.clone(),
         origin: packed.origin.clone(),
-        face_angle_deg: packed.face_angle_deg.clone(),
+        face_angle_deg: entry.face_angles_deg(),
         korn_factor: packed.korn_factor,
     };
     let of_n =
@@ -141,6 +160,19 @@ mod tests {
                 sets.iter().all(|n| library().family(name, *n).is_some()),
                 "{name}'s tables are not usable"
             );
+        }
+    }
+
+    /// A root is thicker than any table; the protractor lies on its face all the same.
+    #[test]
+    fn the_face_angle_of_a_thick_root_is_that_of_its_outline() {
+        for name in ["clark-y", "raf-6"] {
+            let family = library().family(name, 9.0).unwrap();
+            for t in [0.15, 0.27, 0.35, 0.5] {
+                let drawn = library().outline(name, t).unwrap().face_angle_rad().unwrap().to_degrees();
+                let told = family.face_angle_rad(t).unwrap().to_degrees();
+                assert!((drawn - told).abs() < 0.1, "{name} {t}: {told} where {drawn} is drawn");
+            }
         }
     }
 
