@@ -64,6 +64,11 @@ async fn a_twist_is_made_compared_used_and_taken_back() -> Result<()> {
 async fn the_page_answers_during_a_search_which_keeps_its_best_when_called_off() -> Result<()> {
     drive("search", async |browser| {
         browser.open_page().await?;
+        // Many elements, so that the search is still at it when it is called off.
+        let mut job = example()?;
+        job.method.elements = 160;
+        browser.run(&format!("spokeshave.keep.before({})", serde_json::to_string(&job.to_json())?)).await?;
+        browser.reload().await?;
         browser.press("Search").await?;
         browser.wait_for_text("blades tried; best so far").await?;
         let begun = std::time::Instant::now();
