@@ -6,7 +6,7 @@ use std::fmt;
 /// How a source's values were had.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum Mark {
-    /// Read in the source, or in a transcription of it.
+    /// Read in the source, or in a copy of its figures.
     Read,
     /// Worked out from the source's formulas, or by an independent program.
     Computed,

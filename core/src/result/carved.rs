@@ -299,7 +299,7 @@ pub struct PlannedStation {
     pub thickness_m: f64,
     /// Whether there is a flat face to plane.
     pub has_face: bool,
-    /// Whether the blade's angle was read here or on both sides of here. Where it was not, nothing is cut.
+    /// Whether the blade's angle was read here or on both sides of here. Where it was not, the face is not turned.
     pub read: bool,
 }
 

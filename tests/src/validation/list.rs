@@ -15,7 +15,7 @@ Every check of what the core computes against something outside it: what the sou
 may lie and why. Each is asserted by the test named above its table, so that none can stop holding unnoticed; a known miss is
 asserted to miss. Where one line stands for several, it is the one that comes nearest to its tolerance.
 
-Marks: *read*: in the source or a transcription of it; *computed*: from the source's formulas or by an independent program;
+Marks: *read*: in the source or a copy of its figures; *computed*: from the source's formulas or by an independent program;
 *from memory*: recalled, not looked up; *common practice*: what people of the trade do or say.
 
 A tested figure is no proof that a blade holds or flies: see the cautions.
