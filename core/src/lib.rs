@@ -5,6 +5,7 @@
 //! The library does no input or output and holds no state; angles are radians and units SI inside, the names of
 //! results say otherwise (`_deg`).
 
+mod abreast;
 pub mod air;
 pub mod aircraft;
 pub mod bench;
@@ -29,4 +30,4 @@ pub mod shape;
 pub mod sheet;
 pub mod wood;
 
-pub use caution::CAUTIONS;
+pub use caution::cautions;

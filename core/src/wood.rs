@@ -29,7 +29,7 @@ mod vibration;
 pub use blade::{BladeBeam, WoodError};
 pub use margin::{least_margin, least_margin_like};
 pub use mass::mass;
-pub(crate) use material::is_wood;
+pub use material::is_wood;
 pub use material::{Material, Strength, material};
 pub use moisture::at_moisture;
 pub use places::{Doubt, Place};

@@ -2,6 +2,7 @@
 
 use std::f64::consts::TAU;
 
+use crate::any_job::cases;
 use proptest::prelude::*;
 use spokeshave::carved::{self, Measured, import};
 use spokeshave::job::{AngleReference, BladeReading, Carved, CarvedBlade, DEMOS, Job};
@@ -52,7 +53,7 @@ fn blades_as_drawn_do_what_the_drawing_does() {
         let whole = rig.rotor.loads(&rig.condition(i).unwrap());
         assert!((thrust - whole.thrust_n).abs() < 1e-3 && (torque - whole.torque_n_m).abs() < 1e-3);
         let once = p.once_per_turn.unwrap();
-        assert!(once.moment_n_m < 1e-6 && once.air_force_n < 1e-6 && once.mass_force_n < 1e-6);
+        assert!(once.moment_n_m < 1e-6 && once.air_force_n < 1e-6 && once.mass_force_n.unwrap() < 1e-6);
     }
     assert_eq!(found.balance.heavy_blade, None);
     let plan = carved::plan(&rig, 2).unwrap();
@@ -122,7 +123,7 @@ fn unequal_masses_shake_by_their_moment_times_the_square_of_the_speed() {
     assert_eq!(found.balance.heavy_blade, Some(1));
     for p in &found.flight_points {
         let omega = p.carved.rpm.unwrap() * TAU / 60.0;
-        let force = p.once_per_turn.unwrap().mass_force_n;
+        let force = p.once_per_turn.unwrap().mass_force_n.unwrap();
         assert!((force / (found.balance.unbalance_kg_m * omega * omega) - 1.0).abs() < 1e-9);
     }
     let at_tip = 1e-3 * found.balance.grams_at_tip * rig.rotor.blade.radius_m;
@@ -169,7 +170,7 @@ fn a_blade_of_larger_angle_carries_more_and_the_sum_is_that_of_the_mean() {
     assert!((sum / p.carved.thrust_n.unwrap() - 1.0).abs() < 0.01, "{sum} {:?}", p.carved);
     let once = p.once_per_turn.unwrap();
     let moment = p.blades[0].bending_n_m - p.blades[1].bending_n_m;
-    assert!((once.moment_n_m - moment).abs() < 1e-9 && once.mass_force_n < 1e-6);
+    assert!((once.moment_n_m - moment).abs() < 1e-9 && once.mass_force_n.unwrap() < 1e-6);
 }
 
 /// The sizes that a plan leaves, as readings of another measurement.
@@ -339,6 +340,8 @@ fn sheets_are_read_with_units_and_faults_have_line_and_column() {
         ("blade,radius_mm,angle\n1,540,18\n1,540,19", "line 3, column 2: radius: \"540\""),
         ("blade,radius_mm,angle,face angle\n1,540,18,18", "one of them is enough"),
         ("blade,radius_mm,chord_mm,thickness_mm\n1,540,10,75", "swapped"),
+        ("blade,radius_mm,angle\n1,540,18 75", "75 minutes behind 18 degrees; minutes are 0 to 59"),
+        ("blade,station,angle\n1,4,18", "perhaps it is the number of a station"),
         ("blade,radius_mm\n1,540,18", "line 2: 3 columns; the headings have 2"),
     ];
     for (text, expected) in cases {
@@ -361,7 +364,7 @@ fn a_reading_between_stations_counts() {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(12))]
+    #![proptest_config(cases(12))]
     /// Wood only comes off, limits hold, and every departure is at most what it was or as wanted.
     #[test]
     fn no_plan_asks_for_adding(off in prop::collection::vec([-1.5..1.5f64, -3.0..3.0f64, -1.0..1.5f64], 22)) {
@@ -405,6 +408,11 @@ fn nothing_is_cut_where_nothing_was_read() {
     assert!((2..7).all(|s| cut(0, s) > 0.0) && plan.blades[0].stations[..8].iter().all(|s| s.read));
     assert!((8..11).all(|s| cut(0, s) == 0.0 && !plan.blades[0].stations[s].read));
     assert!((0..11).all(|s| cut(1, s) == 0.0 && !plan.blades[1].stations[s].note().is_empty()));
+    // The blade that was read goes all the way to what is wanted, and not half of it towards one that is not known.
+    for p in &plan.blades[0].stations[2..7] {
+        let aim = p.wanted_deg.clamp(p.reachable_deg.0, p.reachable_deg.1);
+        assert!((p.angle_deg - aim).abs() < 0.05 || p.chord_lost_m > 0.0, "{p:?}");
+    }
 }
 
 #[test]
@@ -413,7 +421,9 @@ fn balance_is_not_known_from_angles_alone() {
     for reading in job.carved.as_mut().unwrap().blades.iter_mut().flat_map(|b| &mut b.readings) {
         (reading.chord_m, reading.thickness_m) = (None, None);
     }
-    let balance = carved::analyse(&Rig::new(&job).unwrap()).unwrap().balance;
+    let found = carved::analyse(&Rig::new(&job).unwrap()).unwrap();
+    assert!(found.flight_points.iter().all(|p| p.once_per_turn.unwrap().mass_force_n.is_none()));
+    let balance = found.balance;
     assert!(!balance.read && balance.says().starts_with("not known"), "{}", balance.says());
 }
 

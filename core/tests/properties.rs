@@ -1,6 +1,6 @@
 //! What must hold for any valid job: no panic, every figure finite, and the laws that no propeller escapes.
 
-use crate::any_job::jobs;
+use crate::any_job::{cases, jobs};
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::fit::Along;
@@ -34,7 +34,7 @@ fn unexpected_nulls(point: &Value) -> Vec<String> {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(80))]
+    #![proptest_config(cases(40))]
 
     #[test]
     fn any_valid_job_is_shaped_or_refused_in_words(job in jobs(), cl in prop::option::of(0.1..1.5f64), weight in 0.0..2.0f64) {

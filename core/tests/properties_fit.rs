@@ -1,7 +1,7 @@
 //! What must hold of the fit for any valid job: no panic, every figure finite, no jump but where a limit or a stop is
 //! met.
 
-use crate::any_job::jobs;
+use crate::any_job::{cases, jobs};
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::fit::{envelope, pitch_worth};
@@ -45,7 +45,7 @@ fn without_figure(value: &Value) -> Vec<String> {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(20))]
+    #![proptest_config(cases(10))]
 
     #[test]
     fn any_valid_job_has_a_fit_without_panic_or_a_figure_that_is_not_finite(job in jobs()) {
@@ -113,7 +113,7 @@ fn curve(range: &Envelope, of: fn(&FullThrottle) -> Option<f64>) -> Vec<Option<f
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(32))]
+    #![proptest_config(cases(32))]
 
     #[test]
     fn no_curve_of_a_likely_job_jumps(job in likely_jobs()) {

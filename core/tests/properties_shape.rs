@@ -2,7 +2,7 @@
 
 use std::ops::ControlFlow;
 
-use crate::any_job::jobs;
+use crate::any_job::{cases, jobs};
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::job::Limits;
@@ -16,7 +16,7 @@ fn plain(value: &impl serde::Serialize) -> Value {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(20))]
+    #![proptest_config(cases(7))]
 
     #[test]
     fn what_errors_cost_is_finite_and_its_bands_hold_one_another(job in jobs(), angle_deg in 0.0..2.0f64) {

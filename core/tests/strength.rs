@@ -1,6 +1,6 @@
 //! What must hold of the strength of a blade.
 
-use crate::any_job::jobs;
+use crate::any_job::{cases, jobs};
 use proptest::prelude::*;
 use serde_json::Value;
 use spokeshave::job::{
@@ -121,7 +121,7 @@ fn what_was_not_judged_is_told_and_is_not_called_held() {
     missing(&job, "bolts and boss");
     let mut job = whole.clone();
     job.wood.as_mut().unwrap().hub.as_mut().unwrap().bolt_torque_n_m = None;
-    missing(&job, "bolt_torque_n_m");
+    missing(&job, "torque of the hub");
     let mut job = whole.clone();
     job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: 0.0 };
     missing(&job, "the root in its hub");
@@ -268,7 +268,7 @@ fn an_even_blade_stacked_farther_back_is_bent_by_its_own_pull() {
     near("in the plane", before.rigid_against_n_m - after.rigid_against_n_m, closed, 1e-3);
     near("out of it", after.rigid_forward_n_m, before.rigid_forward_n_m, 1e-9);
     let told = sheet(&b).assumptions.join(" ");
-    assert!(told.contains("bench.stacking") && told.contains("mm before"), "{told}");
+    assert!(told.contains("stacking line") && told.contains("mm before"), "{told}");
 }
 
 /// Sweep turns a loaded blade finer, for its lift stands behind the root.
@@ -366,7 +366,7 @@ fn materials_by_name_and_own_values_are_told() {
 }
 
 proptest! {
-    #![proptest_config(ProptestConfig::with_cases(16))]
+    #![proptest_config(cases(12))]
 
     #[test]
     fn any_valid_job_has_a_sheet_without_panic_or_a_figure_that_is_not_finite(job in jobs()) {

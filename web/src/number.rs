@@ -80,7 +80,7 @@ fn number(text: &str) -> Option<f64> {
     let text = text.replace(',', ".");
     let spaced = text.contains(' ');
     let joined = text.replace(' ', "");
-    let ordinary = joined.chars().all(|c| c.is_ascii_digit() || "+-.".contains(c));
+    let ordinary = joined.chars().all(|c| c.is_ascii_digit() || "+-.eE".contains(c));
     if !ordinary || (spaced && !well_grouped(&text)) { None } else { joined.parse().ok() }
 }
 
@@ -126,6 +126,7 @@ mod tests {
         close(mm(" 75.5 ").unwrap(), 0.0755);
         close(mm("1 520,0").unwrap(), 1.52);
         close(mm("−3").unwrap(), -0.003);
+        close(mm("1.2e3").unwrap(), 1.2);
     }
 
     #[test]
@@ -140,9 +141,21 @@ mod tests {
 
     #[test]
     fn what_is_no_number_is_refused() {
-        for text in
-            ["", "abc", "1.234,5", "1,2,3", "12 34", "1/0", "--3", "NaN", "inf", "1e3", "5 furlongs", "3 1/"]
-        {
+        for text in [
+            "",
+            "abc",
+            "1.234,5",
+            "1,2,3",
+            "12 34",
+            "1/0",
+            "--3",
+            "NaN",
+            "inf",
+            "e",
+            "1e",
+            "5 furlongs",
+            "3 1/",
+        ] {
             assert!(mm(text).is_err(), "{text}");
         }
     }

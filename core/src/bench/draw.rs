@@ -169,6 +169,12 @@ impl Drawing {
         self.items.extend(other.items.iter().cloned().map(|item| item.moved(by)));
     }
 
+    /// Whether anything but guides and centre lines lies within a box: lower left and upper right corner, mm.
+    #[must_use]
+    pub fn tells(&self, within: [[f64; 2]; 2]) -> bool {
+        self.items.iter().any(|item| item.tells(within))
+    }
+
     /// The box round everything: lower left and upper right corner, mm; `None` for an empty drawing.
     #[must_use]
     pub fn bounds(&self) -> Option<[[f64; 2]; 2]> {
@@ -181,6 +187,21 @@ impl Drawing {
 }
 
 impl Item {
+    fn tells(&self, [low, high]: [[f64; 2]; 2]) -> bool {
+        let told = |layer: &Layer| !matches!(layer, Layer::Guide | Layer::Centre);
+        let meets = |points: &[[f64; 2]]| {
+            (0..2).all(|a| points.iter().any(|p| p[a] >= low[a]) && points.iter().any(|p| p[a] <= high[a]))
+        };
+        match self {
+            Self::Line { layer, points, closed } => {
+                let ends = closed.then(|| points.last().zip(points.first())).flatten();
+                told(layer) && (points.windows(2).any(&meets) || ends.is_some_and(|(a, b)| meets(&[*a, *b])))
+            }
+            Self::Circle { layer, .. } => told(layer) && meets(&self.bounds()),
+            Self::Text(_) => meets(&self.bounds()),
+        }
+    }
+
     fn moved(mut self, by: [f64; 2]) -> Self {
         let shift = |p: &mut [f64; 2]| {
             p[0] += by[0];

@@ -24,7 +24,7 @@ pub enum Fault {
     /// A station lies inside the hub.
     #[error(
         "station {station}, r {radius_mm:.1} mm: {by_mm:.1} mm inside the hub, whose radius is {hub_mm:.1} mm; leave it \
-         out or make propeller.hub_diameter_m smaller"
+         out or make the propeller's hub diameter smaller"
     )]
     InsideHub {
         /// Number of the station, from 1.
@@ -83,7 +83,7 @@ pub enum Fault {
     /// The hub's holes reach past its boss.
     #[error(
         "hub drilling: the holes reach {reach_mm:.1} mm from the axis, {by_mm:.1} mm farther than a boss of radius {hub_mm:.1} mm can hold; a smaller \
-         bolt circle or a larger propeller.hub_diameter_m"
+         bolt circle or a larger hub diameter of the propeller"
     )]
     DrilledPastBoss {
         /// How far they reach, mm.

@@ -1,5 +1,7 @@
 //! Every file of the bench with its name.
 
+use crate::cautions;
+
 use super::page::{Paper, Sheet, lay};
 use super::sheet::{leaves, machine_drawings};
 use super::unit::Unit;
@@ -26,7 +28,7 @@ impl Bench {
     #[must_use]
     pub fn sheets(&self, paper: Paper, unit: Unit) -> Vec<Sheet> {
         let title = if self.job.title.is_empty() { "Propeller" } else { &self.job.title };
-        lay(title, &leaves(self, paper, unit), paper, self.warning().as_deref())
+        lay(title, &leaves(self, paper, unit), paper, &cautions(&self.job), self.warning().as_deref())
     }
 }
 

@@ -1,8 +1,11 @@
 //! Sheets of paper: their size, what stands on every one of them, and large drawings laid over several.
 
-use crate::CAUTIONS;
+use crate::caution::CAUTION_COUNT;
 
 use super::draw::{Anchor, Drawing, Layer, breadth_mm};
+
+/// What every sheet says at its foot.
+pub(crate) type Cautions = [&'static str; CAUTION_COUNT];
 
 /// A size of paper, upright.
 #[derive(Clone, Copy, Debug, Default, PartialEq, Eq)]
@@ -93,14 +96,20 @@ pub struct Leaf {
 }
 
 /// Lays leaves on paper, one after the other, each over as many sheets as it needs; every sheet says `title`, its name and its
-/// number, and above the cautions what must be warned of.
+/// number, at its foot the cautions, and above them what must be warned of.
 #[must_use]
-pub fn lay(title: &str, leaves: &[Leaf], paper: Paper, warning: Option<&str>) -> Vec<Sheet> {
+pub fn lay(
+    title: &str,
+    leaves: &[Leaf],
+    paper: Paper,
+    cautions: &Cautions,
+    warning: Option<&str>,
+) -> Vec<Sheet> {
     let mut sheets: Vec<Sheet> = leaves.iter().flat_map(|leaf| laid(leaf, paper)).collect();
     let of = sheets.len();
     for (i, sheet) in sheets.iter_mut().enumerate() {
-        furniture(sheet, title, &format!("sheet {} of {of}, {}", i + 1, paper.name()));
-        let above = MARGIN_MM + CAUTION_MM * CAUTIONS.len() as f64;
+        furniture(sheet, title, &format!("sheet {} of {of}, {}", i + 1, paper.name()), cautions);
+        let above = MARGIN_MM + CAUTION_MM * CAUTION_COUNT as f64;
         ruler(&mut sheet.frame, [MARGIN_MM, above + 1.0]);
         if let Some(words) = warning {
             let room = paper.size_mm()[0] - 2.0 * MARGIN_MM;
@@ -114,7 +123,7 @@ pub fn lay(title: &str, leaves: &[Leaf], paper: Paper, warning: Option<&str>) ->
 /// Binds pages that are read and not measured: each leaf is one page, its drawing's origin in the upper left corner of the room; no
 /// ruler.
 #[must_use]
-pub fn bind(title: &str, pages: Vec<Leaf>, paper: Paper) -> Vec<Sheet> {
+pub fn bind(title: &str, pages: Vec<Leaf>, paper: Paper, cautions: &Cautions) -> Vec<Sheet> {
     let of = pages.len();
     let ([x, y], [w, h]) = (paper.room_at_mm(), paper.room_mm());
     let page = |(i, leaf): (usize, Leaf)| {
@@ -122,7 +131,7 @@ pub fn bind(title: &str, pages: Vec<Leaf>, paper: Paper) -> Vec<Sheet> {
         drawing.add(&leaf.drawing, [x, y + h]);
         let views = vec![View { drawing, window_mm: [[x, y], [x + w, y + h]] }];
         let mut sheet = Sheet { name: leaf.name, size_mm: paper.size_mm(), frame: Drawing::default(), views };
-        furniture(&mut sheet, title, &format!("page {} of {of}, {}", i + 1, paper.name()));
+        furniture(&mut sheet, title, &format!("page {} of {of}, {}", i + 1, paper.name()), cautions);
         sheet.frame.line(Layer::Thin, [[x, y - 8.0], [x + w, y - 8.0]]);
         sheet
     };
@@ -137,6 +146,23 @@ struct Cut {
     count: [u32; 2],
 }
 
+impl Cut {
+    /// Lower left and upper right corner, in the leaf's millimetres, of what a part shows less half of what it shares with its neighbours.
+    fn own(&self, place: [u32; 2]) -> [[f64; 2]; 2] {
+        let step = [0, 1].map(|a| self.part[a] - OVERLAP_MM);
+        let left = self.low[0] + f64::from(place[0]) * step[0];
+        let top = self.high[1] - f64::from(place[1]) * step[1];
+        let shared = |a: usize, later: bool| {
+            let neighbour = if later { place[a] + 1 < self.count[a] } else { place[a] > 0 };
+            if neighbour { 0.5 * OVERLAP_MM } else { 0.0 }
+        };
+        [
+            [left + shared(0, false), top - self.part[1] + shared(1, true)],
+            [left + self.part[0] - shared(0, true), top - shared(1, false)],
+        ]
+    }
+}
+
 fn cut(leaf: &Leaf, room: [f64; 2]) -> Option<Cut> {
     let [low, high] = leaf.drawing.bounds()?;
     let size = [high[0] - low[0], high[1] - low[1]];
@@ -147,13 +173,14 @@ fn cut(leaf: &Leaf, room: [f64; 2]) -> Option<Cut> {
     Some(Cut { low, high, part: [0, 1].map(|a| size[a].min(room[a])), count })
 }
 
-/// Sheets that show a leaf, in rows from the top; narrow parts of a long one stand side by side.
+/// Sheets that show a leaf, in rows from the top, less those on which only a guide line would stand; narrow parts of a long one stand side by side.
 fn laid(leaf: &Leaf, paper: Paper) -> Vec<Sheet> {
     let (room, at) = (paper.room_mm(), paper.room_at_mm());
     let Some(cut) = cut(leaf, room) else { return Vec::new() };
     let [columns, rows] = cut.count;
     let parts: Vec<[u32; 2]> =
         (0..rows).flat_map(|row| (0..columns).map(move |column| [column, row])).collect();
+    let parts: Vec<[u32; 2]> = parts.into_iter().filter(|part| leaf.drawing.tells(cut.own(*part))).collect();
     let abreast =
         if columns == 1 { ((room[0] + GAP_MM) / (cut.part[0] + GAP_MM)).max(1.0) as usize } else { 1 };
     let chunks: Vec<&[[u32; 2]]> = parts.chunks(abreast).collect();
@@ -187,10 +214,12 @@ fn sheet(
     }
     let [columns, rows] = cut.count;
     let [column, row] = [parts[0][0] + 1, parts[0][1] + 1];
-    let name = match (columns, rows, parts.len() as u32) {
+    let name = match (columns, rows, parts.len()) {
         (1, 1, _) => leaf.name.clone(),
         (1, _, 1) => format!("{}, part {row} of {rows} from the top", leaf.name),
-        (1, _, n) => format!("{}, parts {row} to {} of {rows} from the top", leaf.name, row + n - 1),
+        (1, ..) => {
+            format!("{}, parts {row} to {} of {rows} from the top", leaf.name, parts[parts.len() - 1][1] + 1)
+        }
         _ => format!("{}, row {row} of {rows}, column {column} of {columns}", leaf.name),
     };
     Sheet { name, size_mm, frame, views }
@@ -222,7 +251,7 @@ fn joins(frame: &mut Drawing, window: [[f64; 2]; 2], place: [u32; 2], count: [u3
     }
 }
 
-fn furniture(sheet: &mut Sheet, title: &str, number: &str) {
+fn furniture(sheet: &mut Sheet, title: &str, number: &str, cautions: &Cautions) {
     let [w, h] = sheet.size_mm;
     let (left, right, top) = (MARGIN_MM, w - MARGIN_MM, h - MARGIN_MM);
     let frame = &mut sheet.frame;
@@ -234,10 +263,10 @@ fn furniture(sheet: &mut Sheet, title: &str, number: &str) {
         frame.text([left + named, top - 3.5], 3.0, Anchor::Start, fitted(title, 3.0, room - named));
     }
     frame.line(Layer::Thin, [[left, top - 6.0], [right, top - 6.0]]);
-    let high = CAUTION_MM * CAUTIONS.len() as f64;
-    let widest = CAUTIONS.iter().map(|c| breadth_mm(c, 1.0)).fold(1.0, f64::max);
+    let high = CAUTION_MM * CAUTION_COUNT as f64;
+    let widest = cautions.iter().map(|c| breadth_mm(c, 1.0)).fold(1.0, f64::max);
     let size = 2.8_f64.min((right - left) / widest);
-    for (i, line) in CAUTIONS.iter().enumerate() {
+    for (i, line) in cautions.iter().enumerate() {
         frame.text([left, MARGIN_MM + high - CAUTION_MM * (i as f64 + 1.0)], size, Anchor::Start, *line);
     }
 }

@@ -130,14 +130,15 @@ impl Bench {
     /// The closed surface: the whole propeller where it is of one piece, the holes of its hub drilled, else one blade.
     #[must_use]
     pub fn solid(&self) -> Solid {
-        let whole = self.unhanded(&self.rings);
+        self.solid_of(&self.rings)
+    }
+
+    /// The surface over some of the rings, drilled.
+    pub(super) fn solid_of(&self, rings: &[Ring]) -> Solid {
+        let whole = self.unhanded(rings);
         let holes = self.blank.boss.and_then(|boss| Some((boss, Pattern::of(&self.job)?.holes())));
         let drilled = holes.and_then(|(boss, holes)| whole.pierced(&holes, boss, self.form.blade.count));
         drilled.unwrap_or(whole).handed(self.hand() > 0.0)
-    }
-
-    pub(super) fn solid_of(&self, rings: &[Ring]) -> Solid {
-        self.unhanded(rings).handed(self.hand() > 0.0)
     }
 
     /// The surface as it is for a propeller that turns clockwise seen from behind.

@@ -85,7 +85,7 @@ pub fn read(text: &str, p: &Propeller, before: Option<&Carved>) -> Result<(Carve
 fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, BladeReading), SheetError> {
     let tip_m = 0.5 * p.diameter_m;
     let radius = sheet.figure(row, "radius")?;
-    let share = sheet.figure(row, "station")?;
+    let share = sheet.figure(row, "station").map_err(|fault| counted(sheet, row, p, fault))?;
     let (name, radius_m) = match (radius, share) {
         (Some(radius), _) => ("radius", radius),
         (None, Some(share)) => ("station", share * tip_m),
@@ -105,7 +105,12 @@ fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, B
     }
     let reading = BladeReading {
         radius_m,
-        angle_deg: sheet.figure_by(row, angle, angle_of)?,
+        angle_deg: sheet.figure_by(row, angle, angle_of).map_err(|fault| {
+            let minutes = minutes_fault(sheet.word(row, angle));
+            minutes.map_or(fault, |why| {
+                sheet.refused(row, angle, &format!("degrees, or degrees and minutes; {why}"))
+            })
+        })?,
         chord_m: sheet.figure(row, "chord")?,
         thickness_m: sheet.figure(row, "thickness")?,
         track_m: sheet.figure(row, "track")?,
@@ -118,6 +123,20 @@ fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, B
         return Err(sheet.refused(row, "thickness", allowed));
     }
     Ok((blade as usize, reading))
+}
+
+/// The fault of a station that is no share of the radius: likely the number of a station.
+fn counted(sheet: &Sheet, row: &Row, p: &Propeller, fault: SheetError) -> SheetError {
+    let number = sheet.word(row, "station").parse::<usize>().ok();
+    let station = number.and_then(|n| p.stations.get(n.checked_sub(1)?));
+    station.map_or(fault, |station| {
+        let radius_mm = 500.0 * p.diameter_m * station.radius_fraction;
+        let allowed = format!(
+            "a share of the tip radius, 0.001 to 1; perhaps it is the number of a station: write {:.4} here, or {radius_mm:.1} in a column radius_mm",
+            station.radius_fraction
+        );
+        sheet.refused(row, "station", &allowed)
+    })
 }
 
 /// Puts a reading in its place by radius; a second one at the same place is refused.
@@ -140,14 +159,34 @@ fn put(
 /// `18:30`). `None` for anything else.
 #[must_use]
 pub fn angle_of(text: &str) -> Option<f64> {
-    let text = text.trim().trim_end_matches(['\'', '′', '°']).replace(['−', '–'], "-").replace(',', ".");
+    let text = trimmed(text);
     if let Ok(degrees) = text.parse::<f64>() {
         return degrees.is_finite().then_some(degrees);
     }
+    let (sign, degrees, minutes) = parts(&text)?;
+    MINUTES.contains(&minutes).then(|| sign * (f64::from(degrees) + minutes / 60.0))
+}
+
+/// Why a text of degrees and minutes is no angle, where that is the fault of its minutes.
+#[must_use]
+pub fn minutes_fault(text: &str) -> Option<String> {
+    let (_, degrees, minutes) = parts(&trimmed(text))?;
+    let wrong = !MINUTES.contains(&minutes);
+    wrong.then(|| format!("{minutes} minutes behind {degrees} degrees; minutes are 0 to 59"))
+}
+
+/// Minutes that are less than a degree.
+const MINUTES: std::ops::Range<f64> = 0.0..60.0;
+
+fn trimmed(text: &str) -> String {
+    text.trim().trim_end_matches(['\'', '′', '°']).replace(['−', '–'], "-").replace(',', ".")
+}
+
+/// Sign, whole degrees and minutes.
+fn parts(text: &str) -> Option<(f64, u16, f64)> {
     // A phone's keys for figures have no space: two points stand for it.
     let text = text.replace("..", " ");
     let (sign, text) = text.strip_prefix('-').map_or((1.0, text.as_str()), |rest| (-1.0, rest));
     let (whole, minutes) = text.split_once(['°', ':', ' ', '-'])?;
-    let (degrees, minutes): (u16, f64) = (whole.trim().parse().ok()?, minutes.trim().parse().ok()?);
-    (0.0..60.0).contains(&minutes).then(|| sign * (f64::from(degrees) + minutes / 60.0))
+    Some((sign, whole.trim().parse().ok()?, minutes.trim().parse().ok()?))
 }

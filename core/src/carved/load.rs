@@ -33,6 +33,7 @@ pub fn analysed(rig: &Rig, measured: &Measured) -> Result<Carved, CarvedError> {
     let balance = balance(rig, readings, measured, &set.blades)?;
     let masses = Masses {
         moments_kg_m: balance.blades.iter().map(|m| m.moment_kg_m).collect(),
+        read: balance.read,
         ahead_kg_m2: track_moments(rig, readings, &set.blades, balance.density_kg_m3)?,
     };
     let point = |p: &FlightPoint| carved_point(rig, &set, &rotors, &masses, p);
@@ -69,6 +70,8 @@ fn strength(rig: &Rig, blades: &[Rig]) -> Result<Option<CarvedStrength>, CarvedE
 struct Masses {
     /// Mass moment about the axis of each.
     moments_kg_m: Vec<f64>,
+    /// Whether they rest on readings of every blade.
+    read: bool,
     /// The same by how far they lie ahead of the plane of the hub, where track was read.
     ahead_kg_m2: Option<Vec<f64>>,
 }
@@ -184,7 +187,7 @@ fn once_per_turn(loads: &[LoadOf], masses: &Masses, at: &Condition) -> OncePerTu
     OncePerTurn {
         moment_n_m: size(|l| l.bending_n_m),
         air_force_n: size(|l| l.drag_n),
-        mass_force_n: turning(&masses.moments_kg_m),
+        mass_force_n: masses.read.then(|| turning(&masses.moments_kg_m)),
         track_moment_n_m: masses.ahead_kg_m2.as_deref().map(turning),
     }
 }

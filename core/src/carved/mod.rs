@@ -18,7 +18,7 @@ mod plan;
 mod plane;
 
 pub use doubt::doubts;
-pub use import::angle_of;
+pub use import::{angle_of, minutes_fault};
 pub use load::{analyse, analysed, mean_rig};
 pub use measured::{Measured, Size};
 pub use plan::{plan, planed, usual_point};

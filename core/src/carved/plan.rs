@@ -8,7 +8,7 @@
 //! and nothing is cut where nothing was read: beyond the outermost readings, and on a blade without any.
 
 use super::CarvedError;
-use super::even::evened;
+use super::even::evened_read;
 use super::load::{Set, analysed};
 use super::measured::{Measured, Size};
 use super::plane::{Cuts, Profile, Slab};
@@ -166,9 +166,11 @@ impl<'r> Bench<'r> {
             let bound = |least: f64, now: f64| (least.min(now), now);
             let chords: Vec<_> = wedged.iter().map(|w| bound(self.least[s].0, w.chord_m)).collect();
             let thick: Vec<_> = wedged.iter().map(|w| bound(self.least[s].1, w.thickness_m)).collect();
-            goals = evened(drawn_chord, &chords).into_iter().zip(evened(drawn_thickness, &thick)).collect();
+            let read = |k: usize| pieces.iter().map(move |p| p.read[k]);
+            let chords = evened_read(drawn_chord, &chords, read(1));
+            goals = chords.into_iter().zip(evened_read(drawn_thickness, &thick, read(2))).collect();
             let reach: Vec<(f64, f64)> = pieces.iter().zip(&goals).map(|(p, g)| p.reach(*g)).collect();
-            let angles = evened(wanted_rad, &reach);
+            let angles = evened_read(wanted_rad, &reach, read(0));
             let weighed = |((p, a), g): ((&Piece, &f64), &(f64, f64))| p.weighed(*a, *g, drawn_chord);
             turns = pieces.iter().zip(&angles).zip(&goals).map(weighed).collect();
         }

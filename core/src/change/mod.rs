@@ -10,6 +10,7 @@ mod variant;
 use roots::{SimpleConvergency, find_root_brent};
 use thiserror::Error;
 
+use crate::engine::Shaft;
 use crate::job::FlightPoint;
 use crate::result::{Brief, Change, Compared, Figure, Means};
 use crate::rig::Rig;
@@ -59,7 +60,7 @@ pub enum ChangeError {
         /// What was found.
         found: f64,
         /// What is allowed.
-        allowed: &'static str,
+        allowed: String,
     },
     /// The propeller before the change has no answer there.
     #[error("{name} has no answer with the propeller as it is: {state}")]
@@ -77,7 +78,7 @@ pub enum ChangeError {
 /// No such flight point, a figure that is given there, a value that cannot be, or no answer to start from.
 pub fn changes(rig: &Rig, wanted: &Wanted) -> Result<Vec<Change>, ChangeError> {
     let point = rig.job.flight_points.get(wanted.point).ok_or(ChangeError::NoPoint(wanted.point))?;
-    check(point, wanted)?;
+    check(rig, point, wanted)?;
     let base = Base::new(rig);
     let before = brief(base.rig(), point);
     let Some(now) = figure(&before, wanted.figure) else {
@@ -94,7 +95,7 @@ pub fn changed(rig: &Rig, means: Means, amount: f64) -> Option<Rig> {
     Base::new(rig).changed(means, amount)
 }
 
-fn check(point: &FlightPoint, wanted: &Wanted) -> Result<(), ChangeError> {
+fn check(rig: &Rig, point: &FlightPoint, wanted: &Wanted) -> Result<(), ChangeError> {
     use crate::job::Setting;
     let name = point.name.clone();
     match wanted.figure {
@@ -106,9 +107,13 @@ fn check(point: &FlightPoint, wanted: &Wanted) -> Result<(), ChangeError> {
         }
         _ => {}
     }
-    let (name, allowed, span) = match wanted.figure {
-        Figure::AirspeedMS => ("airspeed", "1 to 340 m/s", 1.0..=340.0),
-        _ => ("rpm", "10 to 100000", 10.0..=100_000.0),
+    let limit = rig.shaft.as_ref().and_then(Shaft::limit_rpm);
+    let (name, allowed, span) = match (wanted.figure, limit) {
+        (Figure::AirspeedMS, _) => ("airspeed", "1 to 340 m/s".into(), 1.0..=340.0),
+        (_, Some(limit)) => {
+            ("rpm", format!("10 to {limit:.0}, the limit of the engine at the propeller"), 10.0..=limit)
+        }
+        (_, None) => ("rpm", "10 to 100000".into(), 10.0..=100_000.0),
     };
     if span.contains(&wanted.value) {
         Ok(())

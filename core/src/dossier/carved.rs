@@ -112,23 +112,28 @@ fn does(flow: &mut Flow, carved: &Carved, plan: Option<&RemovalPlan>, scales: &S
     let moments = ["of the thrusts", "of the track"].map(|w| format!("moment\n{w}, {}", scales.torque.sign));
     let forces = ["of the air", "of the masses"].map(|w| format!("force\n{w}, {}", scales.force.sign));
     let columns = [
-        words("flight point", 46.0),
-        figures(&moments[0], 30.0),
-        figures(&moments[1], 28.0),
+        words("flight point", 40.0),
+        words("blades", 28.0),
+        figures(&moments[0], 28.0),
+        figures(&moments[1], 26.0),
         figures(&forces[0], 26.0),
-        figures(&forces[1], 30.0),
+        figures(&forces[1], 28.0),
     ];
-    let row = |p: &CarvedPoint| {
+    let row = |(p, blades): (&CarvedPoint, &str)| {
         let once = p.once_per_turn;
         vec![
             p.drawn.name.clone(),
+            blades.into(),
             scales.torque.figure(once.map(|o| o.moment_n_m)),
             scales.torque.figure(once.and_then(|o| o.track_moment_n_m)),
             scales.force.figure(once.map(|o| o.air_force_n)),
-            scales.force.figure(once.map(|o| o.mass_force_n)),
+            scales.force.figure(once.and_then(|o| o.mass_force_n)),
         ]
     };
-    flow.table(&columns, &carved.flight_points.iter().map(row).collect::<Vec<_>>());
+    let after =
+        |i: usize| plan.and_then(|plan| plan.after.flight_points.get(i)).map(|p| (p, "after the cuts"));
+    let shaken = carved.flight_points.iter().enumerate().flat_map(|(i, p)| [Some((p, "carved")), after(i)]);
+    flow.table(&columns, &shaken.flatten().map(row).collect::<Vec<_>>());
     let each = |p: &CarvedPoint| {
         let thrusts: Vec<String> = p.blades.iter().map(|b| scales.force.figure(b.thrust_n)).collect();
         format!("{}: thrust of each blade {} {}.", p.drawn.name, thrusts.join(", "), scales.force.sign)

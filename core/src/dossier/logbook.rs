@@ -88,7 +88,7 @@ fn tells(flow: &mut Flow, logged: &Logged, scales: &Scales) {
     ];
     let row = |f: &FactorFound| {
         vec![
-            f.name.replace('_', " "),
+            f.title.into(),
             PLAIN.figure(f.value),
             PLAIN.figure(f.value * f.deviation),
             PLAIN.figure(f.width),

@@ -66,7 +66,7 @@ pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper) -> Vec<Sheet> {
     let mut flow = Flow::new(paper, "Verdict");
     verdict::write(&mut flow, &told);
     flow.part("Before you act");
-    flow.list(&crate::CAUTIONS);
+    flow.list(&crate::cautions(&rig.job));
     inputs::write(&mut flow, &told);
     method::write(&mut flow, &told);
     curves::write(&mut flow, &told);
@@ -76,5 +76,5 @@ pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper) -> Vec<Sheet> {
     carved::write(&mut flow, &told);
     logbook::write(&mut flow, &told);
     let title = if rig.job.title.is_empty() { "Propeller" } else { &rig.job.title };
-    bind(title, flow.pages(), paper)
+    bind(title, flow.pages(), paper, &crate::cautions(&rig.job))
 }

@@ -1,7 +1,7 @@
 //! Stress and margins, vibration, weight, hub.
 
 use crate::bench::sheet::table::{figures, words};
-use crate::result::{CaseResult, FrequencyLine, HubResult, ModeKind, Strength, StressStation};
+use crate::result::{CaseResult, FrequencyLine, HubResult, Strength, StressStation};
 
 use crate::wood::{Say, sentence};
 
@@ -188,16 +188,8 @@ fn stress(s: &Strength, scales: &Scales) -> Chart {
 }
 
 fn frequencies(s: &Strength) -> Chart {
-    let name = |l: &FrequencyLine| {
-        let what = match l.mode {
-            ModeKind::Flap => "flap",
-            ModeKind::Lag => "in the disc",
-            ModeKind::Torsion => "twist",
-        };
-        format!("{} {what}", l.number)
-    };
     let curve =
-        |l: &FrequencyLine| Curve::new(name(l), l.rpm.iter().zip(&l.hz).map(|(rpm, hz)| (*rpm, Some(*hz))));
+        |l: &FrequencyLine| Curve::new(l.words(), l.rpm.iter().zip(&l.hz).map(|(rpm, hz)| (*rpm, Some(*hz))));
     Chart {
         title: "Natural frequencies of a blade".into(),
         x: axis("propeller rpm", Scale { sign: "", ..RPM }),

@@ -6,6 +6,7 @@ use super::settle::Met;
 use super::slipstream::kept_share;
 use super::trail::Trail;
 use super::{Solver, marks, top_speed};
+use crate::abreast::abreast;
 use crate::aircraft::{propellers, speeds, thrust_asked_n};
 use crate::job::{Aircraft, FlightPoint};
 use crate::result::{Envelope, EnvelopePoint, FullThrottle, Level, State};
@@ -85,8 +86,8 @@ impl<'r> Course<'r> {
     }
 
     fn points(&self) -> (Vec<EnvelopePoint>, Followed) {
-        let mut followed = Followed::default();
-        let (full, level) = (self.full(&mut followed.full), self.level(&mut followed.level));
+        let ((full, met_full), (level, met_level)) = abreast(|| self.full(), || self.level());
+        let followed = Followed { full: met_full, level: met_level };
         let asked = |v: f64| {
             let aircraft = self.solver.rig.aircraft.as_ref()?;
             let drag = thrust_asked_n(aircraft, &self.at.air, v)? * propellers(aircraft);
@@ -115,8 +116,10 @@ impl<'r> Course<'r> {
         Condition { airspeed_m_s, ..self.at }
     }
 
-    fn full(&self, followed: &mut Vec<Met>) -> Vec<(Option<FullThrottle>, State)> {
+    /// At full throttle, and the answers on the way.
+    fn full(&self) -> (Vec<(Option<FullThrottle>, State)>, Vec<Met>) {
         let mut trail = Trail::default();
+        let mut followed = Vec::new();
         let mut held = false;
         let found: Vec<Result<Full, State>> = self
             .speeds_m_s
@@ -135,19 +138,20 @@ impl<'r> Course<'r> {
             })
             .collect();
         let departures = self.departures(found.iter().map(|f| f.as_ref().ok().map(|f| f.condition)));
-        let told = found.into_iter().zip(departures);
-        told.map(|(full, departure_deg)| match full {
+        let told = found.into_iter().zip(departures).map(|(full, departure_deg)| match full {
             Ok(f) => {
                 let state = if f.held { State::OverLimitRpm } else { State::Ok };
                 (Some(full_throttle(self.solver.rig, &f, departure_deg)), state)
             }
             Err(state) => (None, state),
-        })
-        .collect()
+        });
+        (told.collect(), followed)
     }
 
-    fn level(&self, followed: &mut Vec<Met>) -> Vec<(Option<Level>, State)> {
+    /// Level, and the answers on the way.
+    fn level(&self) -> (Vec<(Option<Level>, State)>, Vec<Met>) {
         let mut trail = Trail::default();
+        let mut followed = Vec::new();
         let found: Vec<Result<_, State>> = self
             .speeds_m_s
             .iter()
@@ -164,14 +168,13 @@ impl<'r> Course<'r> {
             })
             .collect();
         let departures = self.departures(found.iter().map(|f| f.as_ref().ok().map(|(m, _)| m.condition)));
-        let told = found.into_iter().zip(departures);
-        told.map(|(found, departure_deg)| match found {
+        let told = found.into_iter().zip(departures).map(|(found, departure_deg)| match found {
             Ok((met, state)) => {
                 (Some(level(self.solver.rig, &met.condition, &met.loads, state, departure_deg)), state)
             }
             Err(state) => (None, state),
-        })
-        .collect()
+        });
+        (told.collect(), followed)
     }
 
     /// Departures at the radii for each condition; none where there is no condition.

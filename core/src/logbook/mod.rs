@@ -22,6 +22,7 @@ use thiserror::Error;
 
 use crate::aircraft::propellers;
 use crate::carved::{Measured, mean_rig};
+use crate::engine::Shaft;
 use crate::fit;
 use crate::job::{Factors, FlightPoint, Job, LogReading, PitchControl, Setting};
 use crate::result::{Compared, Estimate, FactorFound, LogLine, Logged, Pair};
@@ -90,8 +91,9 @@ pub fn estimate(rig: &Rig) -> Result<Logged, LogbookError> {
     let factors = factors(&found.x);
     let (after, _) = flown(read, &factors).ok_or(LogbookError::NothingTold)?;
     let pairs = pairs(&found, &widths);
-    let all = factors_found(&found, &widths);
-    let remarks = remark::of_all(&equations, &all, &pairs);
+    let electric = matches!(rig.shaft, Some(Shaft::Electric(_)));
+    let all = factors_found(&found, &widths, titles(electric));
+    let remarks = remark::of_all(&equations, &all, &pairs, electric);
     let line = |(i, r): (usize, &LogReading)| {
         let line = line(&before, &after, r, equations[i].as_ref(), found.off[i]);
         if hidden(r) && !r.left_out { LogLine { remark: HIDDEN.into(), ..line } } else { line }
@@ -136,7 +138,7 @@ impl Governed {
 
     /// Whether the governor may have turned the blades.
     fn hides(&self, rig: &Rig, r: &LogReading) -> bool {
-        let gear = rig.shaft.as_ref().map_or(1.0, crate::engine::Shaft::gear_ratio);
+        let gear = rig.shaft.as_ref().map_or(1.0, Shaft::gear_ratio);
         r.engine_rpm.is_some_and(|rpm| rpm / gear > BELOW * self.rpm)
     }
 }
@@ -150,11 +152,25 @@ fn flown(job: &Job, factors: &Factors) -> Option<(Rig, bool)> {
     }
 }
 
-fn factors_found(found: &Found, widths: &[f64; COUNT]) -> Vec<FactorFound> {
+/// The factors in words, in the order of [`NAMES`].
+fn titles(electric: bool) -> [&'static str; COUNT] {
+    let (power, consumption) =
+        if electric { ("Motor power", "Current for a power") } else { ("Engine power", "Fuel for a power") };
+    [power, "Drag area, without lift", "Power to turn the propeller", consumption]
+}
+
+fn factors_found(found: &Found, widths: &[f64; COUNT], titles: [&'static str; COUNT]) -> Vec<FactorFound> {
     let one = |k: usize| {
         let deviation = found.covariance[k][k].sqrt();
         let told = deviation < TOLD * widths[k];
-        FactorFound { name: NAMES[k], value: found.x[k].exp(), deviation, width: widths[k], told }
+        FactorFound {
+            name: NAMES[k],
+            title: titles[k],
+            value: found.x[k].exp(),
+            deviation,
+            width: widths[k],
+            told,
+        }
     };
     (0..COUNT).map(one).collect()
 }
@@ -175,7 +191,7 @@ fn pairs(found: &Found, widths: &[f64; COUNT]) -> Vec<Pair> {
 }
 
 fn line(before: &Rig, after: &Rig, r: &LogReading, equation: Option<&Equation>, off: Option<f64>) -> LogLine {
-    let gear = before.shaft.as_ref().map_or(1.0, crate::engine::Shaft::gear_ratio);
+    let gear = before.shaft.as_ref().map_or(1.0, Shaft::gear_ratio);
     let expected = |rig: &Rig| Some(gear * fit::rpm_of(&expected(rig, r)?));
     let consumed = |rig: &Rig| {
         let (shaft, air) = (rig.shaft.as_ref()?, equation::air(r)?);

@@ -9,21 +9,27 @@ use crate::rig::Rig;
 /// How near a mistaken figure must come to what is expected, as a share.
 const NEAR: f64 = 0.06;
 
-pub(super) fn of_all(equations: &[Option<Equation>], found: &[FactorFound], pairs: &[Pair]) -> Vec<String> {
+pub(super) fn of_all(
+    equations: &[Option<Equation>],
+    found: &[FactorFound],
+    pairs: &[Pair],
+    electric: bool,
+) -> Vec<String> {
+    let words = |name: &str| found.iter().find(|f| f.name == name).map_or("", |f| f.title);
     let tells = |what: Told| equations.iter().flatten().any(|e| e.told.contains(&what));
+    let (engine, flow) = if electric { ("Motor", "current") } else { ("Engine", "fuel flow") };
     let mut remarks = Vec::new();
     if !tells(Told::Thrust) {
         remarks.push("Drag cannot be told: no reading is of steady level flight.".to_string());
     }
     if !tells(Told::Power) {
-        remarks.push("Engine power cannot be told: no reading is at full throttle.".to_string());
+        remarks.push(format!("{engine} power cannot be told: no reading is at full throttle."));
     }
     if !tells(Told::Consumption) {
-        remarks.push(
-            "No fuel flow or current was read: rpm alone tells how strong the engine is for this propeller, not whether the engine is weak or \
-             the propeller heavy to turn."
-                .to_string(),
-        );
+        remarks.push(format!(
+            "No {flow} was read: rpm alone tells how strong the {0} is for this propeller, not whether the {0} is weak or the propeller heavy to turn.",
+            engine.to_lowercase()
+        ));
     }
     for pair in pairs {
         let how = if pair.correlation > 0.0 { "divided by" } else { "multiplied by" };
@@ -37,7 +43,7 @@ pub(super) fn of_all(equations: &[Option<Equation>], found: &[FactorFound], pair
             pair.value * pair.deviation
         ));
     }
-    let untold: Vec<&str> = found.iter().filter(|f| !f.told).map(|f| words(f.name)).collect();
+    let untold: Vec<&str> = found.iter().filter(|f| !f.told).map(|f| f.title).collect();
     if !untold.is_empty() {
         remarks.push(format!(
             "The readings say little of {}: there stands mostly what was thought before.",
@@ -45,16 +51,6 @@ pub(super) fn of_all(equations: &[Option<Equation>], found: &[FactorFound], pair
         ));
     }
     remarks
-}
-
-/// The name of a factor for people.
-fn words(name: &str) -> &'static str {
-    match name {
-        "engine_power" => "Engine power",
-        "drag_area" => "Drag area",
-        "propeller_power" => "Power to turn the propeller",
-        _ => "Consumption",
-    }
 }
 
 /// What is worth saying of a reading: why it tells nothing, or what may have happened when it is far off.

@@ -147,8 +147,9 @@ pub struct OncePerTurn {
     pub moment_n_m: f64,
     /// Force across the shaft by unequal drag of the blades, N.
     pub air_force_n: f64,
-    /// Force across the shaft by unequal masses, N: unbalance times the square of the speed of rotation.
-    pub mass_force_n: f64,
+    /// Force across the shaft by unequal masses, N: unbalance times the square of the speed of rotation; `None` where chord and thickness were not
+    /// read on every blade.
+    pub mass_force_n: Option<f64>,
     /// Moment across the shaft by blades whose masses lie ahead of one another, N m; `None` where no track was read.
     pub track_moment_n_m: Option<f64>,
 }

@@ -42,6 +42,8 @@ pub struct Estimate {
 pub struct FactorFound {
     /// Its key in the job file.
     pub name: &'static str,
+    /// What it is, in words.
+    pub title: &'static str,
     /// The factor.
     pub value: f64,
     /// Standard deviation, as a share.
@@ -123,4 +125,21 @@ pub struct Change {
     pub pitch_m: f64,
     /// Every flight point before (`drawn`) and after (`shaped`).
     pub flight_points: Vec<Compared>,
+}
+
+impl Change {
+    /// A sentence on the flight points at which the change would pass the limit rpm where nothing did before.
+    #[must_use]
+    pub fn says_limit(&self) -> Option<String> {
+        let passes = |p: &&Compared| p.shaped.held_at_limit && !p.drawn.held_at_limit;
+        let names: Vec<&str> =
+            self.flight_points.iter().filter(passes).map(|p| p.shaped.name.as_str()).collect();
+        let says = || {
+            format!(
+                "Full throttle would then pass the limit rpm at {}: throttle back there.",
+                names.join(", ")
+            )
+        };
+        (!names.is_empty()).then(says)
+    }
 }

@@ -263,6 +263,20 @@ pub struct FrequencyLine {
     pub hz: Vec<f64>,
 }
 
+impl FrequencyLine {
+    /// The mode in words.
+    #[must_use]
+    pub fn words(&self) -> String {
+        let nth = match self.number {
+            1 => "first".into(),
+            2 => "second".into(),
+            3 => "third".into(),
+            n => format!("{n}th"),
+        };
+        format!("{nth} {}", self.mode.words())
+    }
+}
+
 /// What moves in a natural mode.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize)]
 #[serde(rename_all = "kebab-case")]

@@ -9,7 +9,7 @@ use crate::rig::Rig;
 pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> Vec<String> {
     let mut all = Vec::new();
     if rig.job.wood.is_none() {
-        all.push(format!("The job names no material (wood.species): {} is taken.", beam.material.title));
+        all.push(format!("The job names no material: {} is taken.", beam.material.title));
     }
     all.push(format!("Values: {}. {}", beam.material.source, sound(rig)));
     all.push(format!("{} The blade is clamped at the edge of the hub.", stands(beam)));
@@ -64,7 +64,7 @@ fn stands(beam: &BladeBeam) -> String {
         format!("{:.1} mm {}", mm.abs(), if mm < 0.0 { other } else { one })
     };
     format!(
-        "The sections stand as the job's bench.stacking says, on a blade that {leaning}: their centroids lie up to {} and {} of the radius through the \
+        "The sections stand on the job's stacking line, on a blade that {leaning}: their centroids lie up to {} and {} of the radius through the \
          axis, and centrifugal force bends and twists the blade by it.",
         side(ahead, "ahead", "aft"),
         side(behind, "behind (against the turning)", "before")

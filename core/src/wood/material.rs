@@ -90,14 +90,21 @@ pub fn material(wood: &Wood) -> Result<Material, WoodError> {
     ] {
         if let Some(limit_pa) = own {
             strength.limit_pa = limit_pa;
-            strength.reason = format!("{:.1} MPa: the job's own limit", limit_pa / 1e6);
+            strength.reason = format!("{}: the job's own limit", said(limit_pa));
         }
     }
     Ok(m)
 }
 
+/// A limit in the units of either bench.
+fn said(limit_pa: f64) -> String {
+    const PSI_PA: f64 = 6894.757;
+    format!("{:.1} MPa ({:.0} psi)", limit_pa / 1e6, limit_pa / PSI_PA)
+}
+
 /// Whether a job's material is known to be wood, which takes up moisture and has grain.
-pub(crate) fn is_wood(wood: &Wood) -> bool {
+#[must_use]
+pub fn is_wood(wood: &Wood) -> bool {
     match &wood.species {
         Named::Own(_) => false,
         Named::Named(name) => {
@@ -162,8 +169,8 @@ impl Taken {
         let low = mean_pa * (1.0 - 1.645 * self.scatter);
         let limit_pa = low * self.lasting / self.safety;
         let reason = format!(
-            "{:.1} MPa: mean {:.1}, of which 19 pieces in 20 reach {:.1} (scatter {:.0} %), {:.0} % of that under repeated load, over a safety factor of {}",
-            limit_pa / 1e6,
+            "{}: mean {:.1}, of which 19 pieces in 20 reach {:.1} (scatter {:.0} %), {:.0} % of that under repeated load, over a safety factor of {}",
+            said(limit_pa),
             mean_pa / 1e6,
             low / 1e6,
             100.0 * self.scatter,
@@ -178,9 +185,9 @@ impl Taken {
         let mean_pa = share * crushing_pa;
         let limit_pa = mean_pa * (1.0 - 1.645 * self.scatter) / self.safety;
         let reason = format!(
-            "{:.1} MPa: proportional limit {:.1} ({share} of the mean crushing strength {:.1}), of which 19 pieces in 20 reach {:.1} \
+            "{}: proportional limit {:.1} ({share} of the mean crushing strength {:.1}), of which 19 pieces in 20 reach {:.1} \
              (scatter {:.0} %), over a safety factor of {}",
-            limit_pa / 1e6,
+            said(limit_pa),
             mean_pa / 1e6,
             crushing_pa / 1e6,
             limit_pa * self.safety / 1e6,

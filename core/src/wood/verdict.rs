@@ -96,11 +96,11 @@ fn missing(rig: &Rig, cases: &[CaseResult], hub: Option<&HubResult>) -> Vec<Stri
         return all;
     }
     match hub {
-        None if Pattern::of(job).is_none() => all.push("bolts and boss (the job has no wood.hub)".into()),
+        None if Pattern::of(job).is_none() => all.push("bolts and boss (the job describes no hub)".into()),
         None => all.push("bolts and boss".into()),
         Some(h) => {
             if h.clamp_pa.is_none() {
-                all.push("the pressure under the plates (no wood.hub.bolt_torque_n_m)".into());
+                all.push("the pressure under the plates (the torque of the hub's bolts is not given)".into());
             }
             if h.boss_tension_pa.is_none() {
                 all.push("the pull of the blades in the boss".into());

@@ -4,6 +4,12 @@ use proptest::prelude::*;
 use spokeshave::job::{DEMOS, FlightPoint, Job, PitchControl, Setting, Station};
 use spokeshave::section::library;
 
+/// How many random jobs a property is tried on: few each time, `SPOKESHAVE_CASES` times as many where that is set.
+pub(crate) fn cases(few: u32) -> ProptestConfig {
+    let times = std::env::var("SPOKESHAVE_CASES").ok().and_then(|n| n.parse().ok()).unwrap_or(1);
+    ProptestConfig::with_cases(few * times)
+}
+
 /// Stations at rising radii with any chord, angle, thickness and shipped section.
 fn stations() -> impl Strategy<Value = Vec<Station>> {
     let names: Vec<String> = library().names().map(String::from).collect();

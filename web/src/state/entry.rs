@@ -2,7 +2,7 @@
 
 use std::collections::BTreeMap;
 
-use spokeshave::carved::angle_of;
+use spokeshave::carved::{angle_of, minutes_fault};
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{Job, Problem};
 
@@ -60,6 +60,11 @@ pub fn tried(
     }
     let quantity = field.quantity(job);
     let minutes = (quantity == Quantity::Angle).then(|| angle_of(text)).flatten();
+    if quantity == Quantity::Angle
+        && let Some(why) = minutes_fault(text)
+    {
+        return Err(sentence(&why));
+    }
     let typed = minutes.map_or_else(|| number::read(units, quantity, text), Ok);
     let value = typed.map_err(|why| {
         let example = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));
@@ -129,7 +134,8 @@ fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem)
                 span_words(units, field.quantity(job), low * scale, high * scale, problem.above_lowest);
             allowed + &hint(problem)
         }
-        _ => elsewhere(units, field, value, problem),
+        _ if own => sentence(&format!("allowed is {}", problem.allowed)),
+        _ => elsewhere(job, units, field, value, problem),
     }
 }
 
@@ -138,14 +144,14 @@ fn hint(problem: &Problem) -> String {
     problem.allowed.split_once("; ").map_or_else(String::new, |(_, cause)| format!(" {}", sentence(cause)))
 }
 
-fn elsewhere(units: Units, field: Field, value: f64, problem: &Problem) -> String {
+fn elsewhere(job: &Job, units: Units, field: Field, value: f64, problem: &Problem) -> String {
     if let Field::Station(_, Measure::Chord) = field
         && problem.path.ends_with("thickness_ratio")
     {
         let chord = number::with_unit(units, Quantity::Length, Some(value));
         return format!("A chord of {chord} is too narrow for the thickness here. Make it thinner first.");
     }
-    format!("Refused: {problem}.")
+    super::notice::in_words(job, problem)
 }
 
 /// Between the stations next to it.

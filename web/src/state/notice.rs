@@ -25,6 +25,10 @@ pub(super) fn in_words(job: &Job, problem: &Problem) -> String {
     format!("{}: {}. Allowed is {}.", place(job, &problem.path), problem.found, problem.allowed)
 }
 
+/// Units at the end of keys: what is found and allowed says them.
+const UNITS: [&str; 12] =
+    ["_m_s", "_m2", "_kg_m3", "_m", "_kg", "_deg", "_percent", "_rpm", "_w", "_pa", "_n_m", "_k"];
+
 /// Where a path of the job file leads: a station, a flight point by name, or the figure itself.
 fn place(job: &Job, path: &str) -> String {
     let index = |list: &str| -> Option<usize> {
@@ -36,7 +40,8 @@ fn place(job: &Job, path: &str) -> String {
     if let Some(point) = index("flight_points").and_then(|i| job.flight_points.get(i)) {
         return point.name.clone();
     }
-    let last = path.rsplit('.').next().unwrap_or(path).replace('_', " ");
+    let last = path.rsplit('.').next().unwrap_or(path);
+    let last = UNITS.iter().find_map(|unit| last.strip_suffix(unit)).unwrap_or(last).replace('_', " ");
     let mut letters = last.chars();
     letters.next().map_or_else(String::new, |first| first.to_uppercase().chain(letters).collect())
 }
@@ -52,5 +57,6 @@ mod tests {
         assert_eq!(place(&job, "propeller.stations[3].chord_m"), "Station 4");
         assert_eq!(place(&job, "flight_points[2].airspeed_m_s"), job.flight_points[2].name);
         assert_eq!(place(&job, "propeller.pitch_control"), "Pitch control");
+        assert_eq!(place(&job, "propeller.hub_diameter_m"), "Hub diameter");
     }
 }

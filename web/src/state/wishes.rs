@@ -52,9 +52,7 @@ impl LimitFigure {
             Self::Clearance => ("ground clearance", "ground_clearance_m", Quantity::Length),
             Self::BlankWidth => ("width of the blank", "blank_width_most_m", Quantity::Length),
             Self::BlankDepth => ("thickness of the blank", "blank_depth_most_m", Quantity::Length),
-            Self::StressMargin => {
-                ("least stress margin, 0.1 for 10 %", "stress_margin_least", Quantity::Coefficient)
-            }
+            Self::StressMargin => ("least margin of stress", "stress_margin_least", Quantity::Share),
         }
     }
 

@@ -1,5 +1,6 @@
 //! The usual cautions.
 
+use spokeshave::{cautions, job::Job};
 use yew::prelude::*;
 
 /// Before a standing start is tried.
@@ -38,11 +39,11 @@ pub fn shape() -> Html {
 }
 
 /// Before a blade is cut or run by what the bench says.
-pub fn bench() -> Html {
+pub fn bench(job: &Job) -> Html {
     html! {
         <aside class="caution" aria-label="Before you act at the bench">
             <b>{ "Before you act" }</b>
-            <ul>{ for spokeshave::CAUTIONS.iter().map(|c| html! { <li>{ *c }</li> }) }</ul>
+            <ul>{ for cautions(job).iter().map(|c| html! { <li>{ *c }</li> }) }</ul>
         </aside>
     }
 }
@@ -60,8 +61,8 @@ pub fn logbook() -> Html {
 }
 
 /// Before wood is cut by what stands on paper.
-pub fn paper() -> Html {
-    html! { <aside class="caution" aria-label="Before you act on paper"><b>{ "Before you act. " }</b>{ spokeshave::CAUTIONS.join(" ") }</aside> }
+pub fn paper(job: &Job) -> Html {
+    html! { <aside class="caution" aria-label="Before you act on paper"><b>{ "Before you act. " }</b>{ cautions(job).join(" ") }</aside> }
 }
 
 /// At the foot of the page.
@@ -69,7 +70,7 @@ pub fn foot() -> Html {
     html! {
         <p>
             <b>{ "Estimates, not an approval. " }</b>
-            { "Leave margin and test. Wood varies: inspect, proof-load and balance every blade, and check hub bolts again as \
+            { "Leave margin and test. Materials vary: inspect, proof-load and balance every blade, and check hub bolts again as \
                the wood moves. Nobody stands in the plane of the disc. The rules of your aviation authority, the engine \
                maker's limits and a licensed inspector or engineer come first." }
         </p>

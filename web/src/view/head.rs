@@ -12,7 +12,7 @@ use super::units::UnitPicks;
 use super::{Act, Seen, use_act};
 use crate::effect::file;
 use crate::saved_page;
-use crate::state::{Action, Field, Notice, Theme};
+use crate::state::{Action, Draft, Field, Notice, Theme};
 use crate::units::LengthUnit;
 
 /// Properties of [`Head`].
@@ -176,25 +176,39 @@ fn Files(props: &StateProps) -> Html {
 }
 
 fn save(act: &Act, state: &Seen) -> Callback<MouseEvent> {
-    let (act, job) = (act.clone(), state.job().clone());
+    let (act, job, left) = (act.clone(), state.job().clone(), not_taken(state));
     Callback::from(move |_: MouseEvent| {
         let name = file::file_name(&job.title, "json");
-        told(&act, file::offer(&name, "application/json", &job.to_json()));
+        told(&act, &left, file::offer(&name, "application/json", &job.to_json()));
     })
 }
 
 fn save_page(act: &Act, state: &Seen) -> Callback<MouseEvent> {
-    let (act, job) = (act.clone(), state.job().clone());
+    let (act, job, left) = (act.clone(), state.job().clone(), not_taken(state));
     Callback::from(move |_: MouseEvent| {
         let name = file::file_name(&job.title, "html");
         let page = saved_page::with_job(&job.to_json());
-        told(&act, page.is_some_and(|page| file::offer(&name, "text/html", &page)));
+        told(&act, &left, page.is_some_and(|page| file::offer(&name, "text/html", &page)));
     })
 }
 
-fn told(act: &Act, taken: bool) {
+/// What was typed and could not be taken over, a line each.
+fn not_taken(state: &Seen) -> Vec<String> {
+    let line = |(field, draft): (&Field, &Draft)| {
+        let why = draft.message.as_ref()?;
+        Some(format!("{}: “{}”. {why}", field.name(state.job()), draft.text))
+    };
+    state.drafts.iter().filter_map(line).collect()
+}
+
+fn told(act: &Act, left: &[String], taken: bool) {
     if taken {
         act.send(Action::Saved);
+        if !left.is_empty() {
+            let title =
+                "Saved with the last figures that were right, without what is typed in these boxes:".into();
+            act.send(Action::Say(Notice { title, lines: left.to_vec() }));
+        }
     } else {
         let lines = vec!["The browser did not take the file. The job is still on this page.".to_string()];
         act.send(Action::Say(Notice { title: "Nothing was saved.".into(), lines }));

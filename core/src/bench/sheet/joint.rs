@@ -112,6 +112,21 @@ fn cut(outline: &[[f64; 2]], normal: [f64; 2], least: f64) -> Vec<[f64; 2]> {
     kept
 }
 
+/// How the other boards meet the side of the one that runs through: the acute angle between their middle lines, degrees, and how far from the axis the
+/// middle line ends, m. Each angle once.
+fn butts(bench: &Bench) -> Vec<(f64, f64)> {
+    let (n, half_m) = (bench.form.blade.count, 0.5 * bench.blank.width_m);
+    let mut all: Vec<(f64, f64)> = Vec::new();
+    for j in (1..n).filter(|j| Some(*j) != facing(bench, 0)) {
+        let (s, c) = direction(bench, j);
+        let angle_deg = s.abs().atan2(c.abs()).to_degrees();
+        if all.iter().all(|(a, _)| (a - angle_deg).abs() > 0.01) {
+            all.push((angle_deg, half_m / s.abs()));
+        }
+    }
+    all
+}
+
 fn words(bench: &Bench, unit: Unit) -> Vec<String> {
     let (n, layers) = (bench.form.blade.count, bench.blank.layers.planks.len());
     let mut words = vec![
@@ -121,6 +136,12 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
         ),
         format!("In lamination 1 {} through; the others butt against the sides.", runs_through(bench, 0)),
     ];
+    words.extend(butts(bench).into_iter().map(|(angle_deg, from_m)| {
+        format!(
+            "A board that stands at {angle_deg:.1}° to the one that runs through is cut at that angle to its own middle line, {} from the axis along it.",
+            unit.say(from_m)
+        )
+    }));
     if n > 4 {
         words.push(format!(
             "Neighbours among those meet half way between them, cut at {:.1}° to their own middle lines.",
@@ -132,11 +153,11 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
     let least = if n.is_multiple_of(2) { n / 2 } else { n };
     if (layers as u32) < least {
         words.push(format!(
-            "Only {layers} laminations: {least} are needed for every blade to run through once (wood.laminations)."
+            "Only {layers} laminations: {least} are needed for every blade to run through once (the laminations of the job's wood)."
         ));
     }
     words.push(
-        "The strength of this joint is not judged. Separate blades in a metal hub are another job: pitch_control \"ground-adjustable\".".into(),
+        "The strength of this joint is not judged. Separate blades in a metal hub are another job: a ground-adjustable propeller.".into(),
     );
     words
 }

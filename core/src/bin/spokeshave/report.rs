@@ -2,8 +2,8 @@
 
 use std::path::PathBuf;
 
-use spokeshave::CAUTIONS;
 use spokeshave::bench::pdf;
+use spokeshave::cautions;
 use spokeshave::dossier::{Scales, dossier};
 
 use crate::bench::{PaperName, UnitName};
@@ -45,7 +45,7 @@ pub(crate) fn run(args: &Args) -> Outcome {
         "{}  {} pages\n\nBefore you act: {}",
         args.pdf.display(),
         pages.len(),
-        CAUTIONS.join(" ")
+        cautions(&rig.job).join(" ")
     ))?;
     Ok((0..rig.job.flight_points.len()).all(|i| rig.condition(i).is_some()))
 }

@@ -56,11 +56,12 @@ fn span(layout: &Layout, span: &Span) -> Html {
 
 fn limit(layout: &Layout, limit: &Limit) -> Html {
     let at = layout.y.px(layout.y.held(limit.y));
-    let (from, to) = if limit.above { (layout.top, at) } else { (at, layout.low) };
     let (left, right) = (px(layout.left), px(layout.right));
     html! {
         <>
-            <rect class="past-limit" x={left.clone()} y={px(from)} width={px(layout.width())} height={px((to - from).max(0.0))} />
+            if limit.hatched {
+                <rect class="past-limit" x={left.clone()} y={px(layout.top)} width={px(layout.width())} height={px((at - layout.top).max(0.0))} />
+            }
             <line class="limit" x1={left} x2={right} y1={px(at)} y2={px(at)} />
         </>
     }

@@ -129,7 +129,7 @@ fn span_name(layout: &Layout, span: &super::Span, clear: &mut Clear) -> Option<H
 
 fn limit_name(layout: &Layout, limit: &super::Limit, clear: &mut Clear) -> Html {
     let half = half_size(&limit.words);
-    let y = layout.y.px(layout.y.held(limit.y)) + if limit.above { 10.0 } else { -10.0 };
+    let y = layout.y.px(layout.y.held(limit.y)) + 10.0;
     let steps = (0..12)
         .map(|i| layout.left + half[0] + 4.0 + f64::from(i) / 11.0 * (layout.width() - 2.0 * half[0] - 8.0));
     let room = |x: &f64| clear.room([*x, y], half, ENOUGH);

@@ -59,8 +59,8 @@ pub struct Limit {
     pub y: f64,
     /// What it is.
     pub words: AttrValue,
-    /// Whether the far side is above.
-    pub above: bool,
+    /// Whether the far side, which is above, is hatched.
+    pub hatched: bool,
 }
 
 /// An upright line, such as a flight point.

@@ -118,6 +118,10 @@ pub(super) fn HubTable(props: &HubTableProps) -> Html {
     let (h, units) = (&props.hub, props.units);
     let pa = |v| with_unit(units, Quantity::Stress, v);
     let torque = |v| with_unit(units, Quantity::Torque, v);
+    let past = h.past_boss_m.map(|m| {
+        let by = format!("{} past what it can hold", with_unit(units, Quantity::Length, Some(m)));
+        ("Holes of the hub in the boss", by, String::new())
+    });
     let rows = [
         ("Bolts on the wood, if friction did nothing", pa(Some(h.bearing_pa)), pa(Some(h.bearing_limit_pa))),
         ("Tension through the boss", pa(h.boss_tension_pa), pa(Some(h.boss_limit_pa))),
@@ -138,7 +142,7 @@ pub(super) fn HubTable(props: &HubTableProps) -> Html {
                 <caption>{ format!("Hub: greatest torque {}, pull of a blade {}; least margin {} %", torque(Some(h.torque_n_m)),
                     with_unit(units, Quantity::Force, Some(h.pull_n)), signed(100.0 * h.margin, 0)) }</caption>
                 <thead><tr><th scope="col">{ "What" }</th><th scope="col">{ "Found" }</th><th scope="col">{ "Limit" }</th></tr></thead>
-                <tbody>{ for rows.map(row) }</tbody>
+                <tbody>{ for rows.into_iter().chain(past).map(row) }</tbody>
             </table>
         </div>
     }

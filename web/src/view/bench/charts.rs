@@ -1,6 +1,6 @@
 //! Stress along the blade against its limits, and natural frequencies over the rpm.
 
-use spokeshave::result::{FrequencyLine, ModeKind, Strength, StressStation};
+use spokeshave::result::{Strength, StressStation};
 use yew::prelude::*;
 
 use crate::chart::line::{Axis, Limit, LineChart, Series, Stroke};
@@ -35,12 +35,14 @@ fn stress(sheet: &Strength, units: Units) -> Html {
         curve("compression", Stroke::Dashed, |s| s.compression_pa),
         curve("by rotation alone", Stroke::Dotted, |s| s.axial_pa),
     ];
+    // Between the limits one kind of stress is past its own and the other is not: hatched is what is past both.
+    let m = &sheet.material;
+    let most = m.tension_limit_pa.max(m.compression_limit_pa);
     let limit = |name: &str, pa: f64| Limit {
         y: pa,
         words: format!("{name} {}", with_unit(units, Quantity::Stress, Some(pa))).into(),
-        above: true,
+        hatched: pa >= most,
     };
-    let m = &sheet.material;
     let limits =
         vec![limit("tension limit", m.tension_limit_pa), limit("compression limit", m.compression_limit_pa)];
     let x = Axis { words: "radius".into(), unit: units.unit(Quantity::Length), span: None };
@@ -55,7 +57,7 @@ fn frequencies(sheet: &Strength, units: Units) -> Html {
     };
     let highest = lines.iter().flat_map(|l| l.hz.iter().copied()).fold(0.0, f64::max);
     let modes = lines.iter().map(|l| Series {
-        name: words(l).into(),
+        name: l.words().into(),
         points: l.rpm.iter().zip(&l.hz).map(|(rpm, hz)| [*rpm, *hz]).collect(),
         stroke: Stroke::Solid,
     });
@@ -75,13 +77,4 @@ fn frequencies(sheet: &Strength, units: Units) -> Html {
         span: None,
     };
     html! { <LineChart title="Natural frequencies of a blade" {x} {y} {series} height={240.0} /> }
-}
-
-fn words(line: &FrequencyLine) -> String {
-    let what = match line.mode {
-        ModeKind::Flap => "flap",
-        ModeKind::Lag => "in the disc",
-        ModeKind::Torsion => "twist",
-    };
-    format!("{} {what}", line.number)
 }

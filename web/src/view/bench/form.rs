@@ -23,12 +23,15 @@ pub(super) fn WoodForm(props: &WoodFormProps) -> Html {
     let wood = wood_of(job);
     let held = wood.hub.is_some();
     let own = species_of(job).is_none();
+    // What is no wood takes up no moisture.
+    let wooden = spokeshave::wood::is_wood(&wood);
+    let asked = |figure: &WoodFigure| wooden || *figure != WoodFigure::Moisture;
     html! {
         <div class="machine-form">
             <Pick label="Material" {options} picked={species_of(job)} onpick={act.on(move |i| choose(WoodChoice::Species(i)))} />
             if own { <p class="note">{ "The job brings a material of its own." }</p> }
             if job.wood.is_none() { <p class="note">{ "The job names no material: this one is taken until another is picked." }</p> }
-            { for WoodFigure::BLADE.map(|figure| labelled(state, figure)) }
+            { for WoodFigure::BLADE.into_iter().filter(asked).map(|figure| labelled(state, figure)) }
             <Switch label="Judge the hub" on={held} onswitch={act.on(move |on| choose(WoodChoice::Hub(on)))} />
             if held { { for WoodFigure::HUB.map(|figure| labelled(state, figure)) } }
         </div>

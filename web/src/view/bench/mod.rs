@@ -72,7 +72,7 @@ pub fn BenchPanel(props: &BenchPanelProps) -> Html {
                 <WoodForm state={state.clone()} />
                 <div class="machine-readings">{ sheet }</div>
             </div>
-            { caution::bench() }
+            { caution::bench(state.job()) }
         </div>
     }
 }

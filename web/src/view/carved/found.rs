@@ -135,7 +135,7 @@ fn brief_row(
             <td>{ once.map(|o| of(Quantity::Torque, Some(o.moment_n_m))) }</td>
             <td>{ once.map(|o| of(Quantity::Torque, o.track_moment_n_m)) }</td>
             <td>{ once.map(|o| of(Quantity::Force, Some(o.air_force_n))) }</td>
-            <td>{ once.map(|o| of(Quantity::Force, Some(o.mass_force_n))) }</td>
+            <td>{ once.map(|o| of(Quantity::Force, o.mass_force_n)) }</td>
         </tr>
     }
 }

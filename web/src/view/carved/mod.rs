@@ -89,7 +89,7 @@ pub fn CarvedPanel(props: &CarvedPanelProps) -> Html {
         <div class="carved">
             <p class="note">
                 { "Type what the protractor and the callipers read; leave empty what was not measured. Enter goes down the column. \
-                   An angle may be in decimals or in degrees and minutes, 18 30 or 18..30. Between readings the difference from the drawing is interpolated." }
+                   An angle may be in decimals or in degrees and minutes, 18 30 or 18..30. Track is how far the blade lies ahead of the plane of the hub, less than nothing where it lies behind. Between readings the difference from the drawing is interpolated." }
             </p>
             <div class="settings unprinted">
                 <Pick label="Angles read" options={vec!["on the flat face".into(), "to the chord line".into()]}

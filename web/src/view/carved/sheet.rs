@@ -23,7 +23,9 @@ pub(super) struct ReadingsSheetProps {
 #[component]
 pub(super) fn ReadingsSheet(props: &ReadingsSheetProps) -> Html {
     let act = use_act();
-    let clear = choose(&act, |_: MouseEvent| CarvedChoice::Clear);
+    // Not switched off when nothing is left to take out: that would take the focus away from the button just pressed.
+    let none = props.state.job().carved.is_none();
+    let clear = if none { Callback::noop() } else { choose(&act, |_: MouseEvent| CarvedChoice::Clear) };
     let take = {
         let (act, state) = (act.clone(), props.state.clone());
         Callback::from(move |text: AttrValue| match read(&state, &text) {
@@ -43,7 +45,7 @@ pub(super) fn ReadingsSheet(props: &ReadingsSheetProps) -> Html {
             </p>
             <Pasted id="carved-sheet" label="Readings" hint={HINT} most_bytes={MOST_BYTES} {take} />
             <p class="buttons">
-                <button type="button" class="act" disabled={props.state.job().carved.is_none()} onclick={clear}>
+                <button type="button" class="act" aria-disabled={none.then_some("true")} onclick={clear}>
                     { "Take out all readings of the blades" }
                 </button>
             </p>

@@ -104,7 +104,7 @@ fn thrust(props: &ChartsProps, envelope: &Envelope) -> Plot {
 
 fn rpm(props: &ChartsProps, envelope: &Envelope) -> Plot {
     let words = |rpm| format!("limit {}", figure(props.state.units, Quantity::Rpm, Some(rpm)));
-    let limit = |rpm: f64| Limit { y: rpm, words: words(rpm).into(), above: true };
+    let limit = |rpm: f64| Limit { y: rpm, words: words(rpm).into(), hatched: true };
     Plot {
         title: "Propeller rpm",
         unit: props.state.units.unit(Quantity::Rpm),

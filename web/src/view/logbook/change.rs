@@ -135,9 +135,10 @@ fn told(c: &Change, speed: bool, units: Units) -> Html {
         (false, None) => format!(" Not reached. {}", c.state.sentence()),
     };
     let then = format!(
-        "{amount}{how}.{reached} Then {} across, pitch {} at three quarters of the radius.",
+        "{amount}{how}.{reached} Then {} across, pitch {} at three quarters of the radius. {}",
         with_unit(units, Quantity::Length, Some(c.diameter_m)),
-        with_unit(units, Quantity::Length, Some(c.pitch_m))
+        with_unit(units, Quantity::Length, Some(c.pitch_m)),
+        c.says_limit().unwrap_or_default()
     );
     let pairs = c.flight_points.iter().map(|p| (&p.drawn, &p.shaped));
     html! {

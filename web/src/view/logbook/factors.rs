@@ -43,12 +43,7 @@ fn row(f: &FactorFound, most: f64) -> Html {
     let line = |class: &'static str, (from, to): (f64, f64)| {
         html! { <line {class} x1={from.to_string()} x2={to.to_string()} y1={(0.5 * HEIGHT).to_string()} y2={(0.5 * HEIGHT).to_string()} /> }
     };
-    let name = match f.name {
-        "engine_power" => "Engine power",
-        "drag_area" => "Drag area, without lift",
-        "propeller_power" => "Power to turn the propeller",
-        _ => "Fuel or current for a power",
-    };
+    let name = f.title;
     let middle = x(1.0).to_string();
     html! {
         <tr class={classes!((!f.told).then_some("untold"))}>

@@ -15,12 +15,15 @@ use crate::units::{Quantity, Units};
 pub(super) struct LinesProps {
     pub(super) logged: Rc<Logged>,
     pub(super) units: Units,
+    /// Whether the engine is a motor.
+    pub(super) electric: bool,
 }
 
 /// Every reading with its residual.
 #[component]
 pub(super) fn Lines(props: &LinesProps) -> Html {
     let rows = props.logged.readings.iter().enumerate().map(|(i, line)| row(i, line, props.units));
+    let flow = if props.electric { "Current, A" } else { "Fuel, kg/h" };
     html! {
         <>
         <Residuals ..props.clone() />
@@ -29,8 +32,8 @@ pub(super) fn Lines(props: &LinesProps) -> Html {
                 <caption>{ "Readings against what is expected without and with the factors" }</caption>
                 <thead><tr>
                     <th scope="col">{ "Reading" }</th><th scope="col">{ "Rpm read" }</th><th scope="col">{ "less expected, before" }</th>
-                    <th scope="col">{ "with the factors" }</th><th scope="col">{ "Fuel or current" }</th><th scope="col">{ "expected, before" }</th>
-                    <th scope="col">{ "with the factors" }</th><th scope="col">{ "Off, in σ" }</th><th scope="col">{ "" }</th>
+                    <th scope="col">{ "with the factors" }</th><th scope="col">{ flow }</th><th scope="col">{ "expected, before" }</th>
+                    <th scope="col">{ "with the factors" }</th><th scope="col">{ "Off" }<small>{ "times its likely error" }</small></th><th scope="col">{ "" }</th>
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
             </table>

@@ -8,6 +8,7 @@ mod sheet;
 
 use std::rc::Rc;
 
+use spokeshave::job::Engine;
 use spokeshave::result::Logged;
 use yew::prelude::*;
 
@@ -61,6 +62,11 @@ pub fn in_a_line(state: &State) -> String {
     }
 }
 
+/// Whether the engine is a motor.
+fn is_electric(state: &State) -> bool {
+    matches!(state.job().engine, Some(Engine::Electric(_)))
+}
+
 /// What a choice about the logbook does.
 fn choose<T: 'static>(act: &Act, make: impl Fn(T) -> LogbookChoice + 'static) -> Callback<T> {
     act.on(move |what: T| Action::Choose(Choice::Logbook(make(what)), Running::default()))
@@ -95,6 +101,7 @@ fn told(act: &Act, props: &LogbookPanelProps) -> Html {
     let factors = logged.estimate.factors;
     let keep = choose(act, move |_: MouseEvent| LogbookChoice::Keep(factors));
     let logbook = state.job().logbook.clone().unwrap_or_default();
+    let electric = is_electric(state);
     let blade = if logged.as_carved { "the carved propeller, as measured" } else { "the propeller as drawn" };
     html! {
         <>
@@ -109,8 +116,8 @@ fn told(act: &Act, props: &LogbookPanelProps) -> Html {
                     <Switch label="Use the factors kept" on={logbook.in_use} onswitch={choose(act, LogbookChoice::Use)} />
                 }
             </p>
-            <Lines logged={logged.clone()} units={state.units} />
-            <BeforeAfter {logged} units={state.units} />
+            <Lines logged={logged.clone()} units={state.units} {electric} />
+            <BeforeAfter {logged} units={state.units} {electric} />
         </>
     }
 }

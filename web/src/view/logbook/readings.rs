@@ -2,20 +2,29 @@
 
 use yew::prelude::*;
 
-use super::choose;
+use super::{choose, is_electric};
 use crate::state::{Field, LogFigure, LogbookChoice};
 use crate::view::form::{Entry, Message, Shown, Switch};
 use crate::view::{Act, Seen, use_act};
 
-const COLUMNS: [LogFigure; 7] = [
-    LogFigure::Rpm,
-    LogFigure::Throttle,
-    LogFigure::Airspeed,
-    LogFigure::Altitude,
-    LogFigure::Temperature,
-    LogFigure::Fuel,
-    LogFigure::Current,
-];
+/// What is asked of a reading: what the engine draws is fuel or current, and the other only where it was read all the same.
+fn columns(state: &Seen) -> Vec<LogFigure> {
+    let all = state.job().logbook.iter().flat_map(|l| &l.readings);
+    let (fuel, current) = all.fold((false, false), |(fuel, current), r| {
+        (fuel || r.fuel_kg_per_h.is_some(), current || r.current_a.is_some())
+    });
+    let electric = is_electric(state);
+    let mut columns = vec![
+        LogFigure::Rpm,
+        LogFigure::Throttle,
+        LogFigure::Airspeed,
+        LogFigure::Altitude,
+        LogFigure::Temperature,
+    ];
+    columns.extend((!electric || fuel).then_some(LogFigure::Fuel));
+    columns.extend((electric || current).then_some(LogFigure::Current));
+    columns
+}
 
 /// Properties of [`Readings`].
 #[derive(Properties, PartialEq)]
@@ -28,9 +37,10 @@ pub(super) struct ReadingsProps {
 pub(super) fn Readings(props: &ReadingsProps) -> Html {
     let (act, state) = (use_act(), &props.state);
     let count = state.job().logbook.as_ref().map_or(0, |l| l.readings.len());
+    let (electric, columns) = (is_electric(state), columns(state));
     let heading = |f: &LogFigure| {
         let (name, unit) = match f {
-            LogFigure::Rpm => ("Engine rpm", ""),
+            LogFigure::Rpm => (if electric { "Motor rpm" } else { "Engine rpm" }, ""),
             LogFigure::Throttle => ("Throttle", "%"),
             LogFigure::Airspeed => ("True airspeed", state.units.symbol(f.quantity())),
             LogFigure::Altitude => ("Altitude", state.units.symbol(f.quantity())),
@@ -51,11 +61,11 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
                     <table class="sheet-table log-readings">
                         <thead><tr>
                             <th scope="col">{ "Reading" }</th>
-                            { for COLUMNS.iter().map(heading) }
+                            { for columns.iter().map(heading) }
                             <th scope="col">{ "Level" }</th><th scope="col">{ "Left out" }</th>
                             <th><span class="unseen">{ "Remove" }</span></th>
                         </tr></thead>
-                        <tbody>{ for (0..count).map(|i| row(&act, state, i)) }</tbody>
+                        <tbody>{ for (0..count).map(|i| row(&act, state, &columns, i)) }</tbody>
                     </table>
                 </div>
             }
@@ -66,8 +76,8 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
     }
 }
 
-fn row(act: &Act, state: &Seen, i: usize) -> Html {
-    let boxes = COLUMNS.map(|f| Shown::of(state, &[], Field::Log(i, f)));
+fn row(act: &Act, state: &Seen, columns: &[LogFigure], i: usize) -> Html {
+    let boxes: Vec<Shown> = columns.iter().map(|f| Shown::of(state, &[], Field::Log(i, *f))).collect();
     let reading = state.job().logbook.as_ref().and_then(|l| l.readings.get(i)).cloned().unwrap_or_default();
     let wrong = boxes.iter().any(|s| s.message.is_some());
     let switch = |label: &str, on: bool, make: fn(usize, bool) -> LogbookChoice| {

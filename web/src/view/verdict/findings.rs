@@ -92,7 +92,8 @@ fn quantity(limit: Limit) -> Quantity {
         }
         Limit::EnginePower => Quantity::Power,
         Limit::DiameterMost | Limit::BlankWidthMost | Limit::BlankDepthMost => Quantity::Length,
-        Limit::TipMachMost | Limit::StressMarginLeast => Quantity::Coefficient,
+        Limit::TipMachMost => Quantity::Coefficient,
+        Limit::StressMarginLeast => Quantity::Share,
     }
 }
 

@@ -111,6 +111,7 @@ fn Shown(props: &ShownProps) -> Html {
         use_memo((props.made.clone(), *paper, unit), |(made, paper, unit)| made.0.sheets(*paper, *unit));
     html! {
         <div class="workshop">
+            if let Some(warning) = props.made.0.warning() { <p class="warning">{ warning }</p> }
             <div class="workshop-views">
                 <Turning made={props.made.clone()} />
                 <Views made={props.made.clone()} {unit} />
@@ -119,7 +120,7 @@ fn Shown(props: &ShownProps) -> Html {
             <Sheets sheets={laid.clone()} paper={*paper} name="sheet"
                 note="Print at 100 %, never fitted to the page, and measure the 100 mm bar on every sheet before you cut." />
             <Files made={props.made.clone()} sheets={laid} {unit} />
-            { caution::paper() }
+            { caution::paper(&props.made.0.job) }
         </div>
     }
 }

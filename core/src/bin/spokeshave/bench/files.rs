@@ -2,8 +2,8 @@
 
 use std::path::PathBuf;
 
-use spokeshave::CAUTIONS;
 use spokeshave::bench::{Bench, File, Unit, files};
+use spokeshave::cautions;
 use spokeshave::rig::Rig;
 
 use super::sheets::UnitName;
@@ -56,6 +56,6 @@ pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     if let Some(warning) = bench.warning() {
         print(&format!("\n{warning}"))?;
     }
-    print(&format!("\nBefore you act: {}", CAUTIONS.join(" ")))?;
+    print(&format!("\nBefore you act: {}", cautions(&rig.job).join(" ")))?;
     Ok(true)
 }

@@ -1,8 +1,8 @@
 //! `spokeshave bench JOB sheets`: paper for the bench, full size.
 
 use clap::ValueEnum;
-use spokeshave::CAUTIONS;
 use spokeshave::bench::{Paper, Unit, sheet_files};
+use spokeshave::cautions;
 use spokeshave::rig::Rig;
 
 use super::files::{Folder, made_ready};
@@ -57,7 +57,7 @@ pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     }
     print(&format!(
         "\nPrint at 100 %, never fitted to the page; measure the 100 mm bar on every sheet.\nBefore you act: {}",
-        CAUTIONS.join(" ")
+        cautions(&rig.job).join(" ")
     ))?;
     Ok(true)
 }

@@ -22,7 +22,7 @@ pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
     } else if args.format.csv {
         print_csv(&HEADER, strength.stations.iter().map(row))?;
     } else {
-        print(&text::sheet(&strength))?;
+        print(&text::sheet(&rig.job, &strength))?;
     }
     Ok(answered(&strength))
 }

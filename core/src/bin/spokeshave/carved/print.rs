@@ -76,7 +76,7 @@ pub(super) fn text(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
     }));
     parts.extend(carved.blades.iter().map(blade));
     parts.push(points(carved, plan));
-    parts.push(shaking(carved));
+    parts.push(shaking(carved, plan));
     parts.push(balance(carved, plan));
     parts.extend(carved.strength.as_ref().map(CarvedStrength::says));
     let after = plan.and_then(|plan| plan.after.strength.as_ref());
@@ -127,21 +127,25 @@ fn points(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
     briefs(rows.flatten())
 }
 
-fn shaking(carved: &Carved) -> String {
-    let header = ["once per turn", "thrust by blade N", "thrust N m", "track N m", "air N", "masses N"];
-    let row = |p: &CarvedPoint| {
+fn shaking(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
+    let header =
+        ["once per turn", "blades", "thrust by blade N", "thrust N m", "track N m", "air N", "masses N"];
+    let row = |(p, blades): (&CarvedPoint, &str)| {
         let thrusts: Vec<String> = p.blades.iter().map(|b| figure(Some(b.thrust_n), 1)).collect();
         let once = p.once_per_turn;
         vec![
             p.drawn.name.clone(),
+            blades.into(),
             thrusts.join(" "),
             figure(once.map(|o| o.moment_n_m), 2),
             figure(once.and_then(|o| o.track_moment_n_m), 2),
             figure(once.map(|o| o.air_force_n), 2),
-            figure(once.map(|o| o.mass_force_n), 1),
+            figure(once.and_then(|o| o.mass_force_n), 1),
         ]
     };
-    table(&header, carved.flight_points.iter().map(row).collect())
+    let after = |i: usize| plan.and_then(|plan| plan.after.flight_points.get(i)).map(|p| (p, "planned"));
+    let rows = carved.flight_points.iter().enumerate().flat_map(|(i, p)| [Some((p, "carved")), after(i)]);
+    table(&header, rows.flatten().map(row).collect())
 }
 
 fn balance(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
@@ -167,7 +171,7 @@ fn sheet(plan: &RemovalPlan) -> String {
         "then face °",
         "chord",
         "thick",
-        "reach °",
+        "can reach °",
         "off by °",
         "",
     ];

@@ -56,7 +56,7 @@ fn factors(found: &[FactorFound]) -> String {
     let row = |f: &FactorFound| {
         let told = if f.told { "told by the readings" } else { "not told by the readings" };
         vec![
-            f.name.replace('_', " "),
+            f.title.into(),
             figure(Some(f.value), 3),
             figure(Some(f.value * f.deviation), 3),
             figure(Some(f.width), 3),
@@ -108,9 +108,10 @@ pub(super) fn changes(rig: &Rig, wanted: &Wanted, changes: &[Change]) -> String 
         };
         let rows = c.flight_points.iter().flat_map(|p| [(&p.drawn, "now"), (&p.shaped, "changed")]);
         parts.push(format!(
-            "{amount}{reached}; then {} mm across, pitch {} mm\n{}",
+            "{amount}{reached}; then {} mm across, pitch {} mm{}\n{}",
             figure(Some(1e3 * c.diameter_m), 0),
             figure(Some(1e3 * c.pitch_m), 0),
+            c.says_limit().map_or_else(String::new, |says| format!(". {says}")),
             briefs(rows)
         ));
     }

@@ -1,5 +1,6 @@
 //! The sheet for people.
 
+use spokeshave::job::Job;
 use spokeshave::result::{
     CaseResult, HubResult, MaterialUsed, RunningStation, RunningTwist, Strength, StressStation, Vibration,
 };
@@ -7,7 +8,7 @@ use spokeshave::result::{
 use crate::table::{figure, signed, table};
 
 /// The whole sheet: what decides first, then stations, cases, vibration, weight, hub, what was taken for granted, cautions.
-pub(super) fn sheet(s: &Strength) -> String {
+pub(super) fn sheet(job: &Job, s: &Strength) -> String {
     let decides = s.governing.as_ref().map_or_else(
         || "No flight point has an answer: no load is known.".into(),
         |g| format!("{}\nThat limit is {}.", g.sentence, g.reason),
@@ -21,7 +22,7 @@ pub(super) fn sheet(s: &Strength) -> String {
     parts.push(mass(s));
     parts.extend(s.hub.as_ref().map(hub));
     parts.push(list("Taken for granted", &s.assumptions));
-    parts.push(list("Before you act", &spokeshave::CAUTIONS));
+    parts.push(list("Before you act", &spokeshave::cautions(job)));
     parts.join("\n\n")
 }
 
