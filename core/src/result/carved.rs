@@ -309,8 +309,8 @@ impl PlannedStation {
     #[must_use]
     pub fn note(&self) -> &'static str {
         match (self.read, self.has_face) {
-            (false, _) => "not read here: not turned",
-            (true, false) => "no flat face: not turned",
+            (false, _) => "not read, so not turned",
+            (true, false) => "no flat face, so not turned",
             (true, true) => "",
         }
     }

@@ -180,7 +180,7 @@ pub(super) fn Holds(props: &FoundProps) -> Html {
     html! {
         <>
             { for props.found.carved.strength.iter().map(|s| line("", s)) }
-            { for after.iter().map(|s| line("After the cuts below: ", s)) }
+            { for after.iter().map(|s| line("After the cuts below. ", s)) }
         </>
     }
 }

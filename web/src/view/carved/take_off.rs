@@ -4,7 +4,7 @@ use spokeshave::result::{PlannedBlade, PlannedStation, RemovalPlan};
 use yew::prelude::*;
 
 use super::found::{FoundProps, fine};
-use crate::number::{figure, fixed, fixed_or_none, signed};
+use crate::number::{NO_FIGURE, figure, fixed, fixed_or_none, signed};
 use crate::units::{Quantity, Units};
 
 /// A table for each blade.
@@ -49,8 +49,23 @@ fn table(plan: &RemovalPlan, blade: &PlannedBlade, units: Units) -> Html {
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
             </table>
+            <p class="note">{ notes(blade, units) }</p>
         </div>
     }
+}
+
+/// Which stations cannot be put right, and why.
+fn notes(blade: &PlannedBlade, units: Units) -> String {
+    let mut all: Vec<(&str, Vec<String>)> = Vec::new();
+    for s in blade.stations.iter().filter(|s| !s.note().is_empty()) {
+        let at = figure(units, Quantity::Length, Some(s.radius_m));
+        match all.iter_mut().find(|(why, _)| *why == s.note()) {
+            Some((_, places)) => places.push(at),
+            None => all.push((s.note(), vec![at])),
+        }
+    }
+    let told = |(why, places): &(&str, Vec<String>)| format!("At {}: {why}.", places.join(", "));
+    all.iter().map(told).collect::<Vec<_>>().join(" ")
 }
 
 fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
@@ -66,7 +81,7 @@ fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
             <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
             <td>{ fine(units, s.chord_m) }</td>
             <td>{ fine(units, s.thickness_m) }</td>
-            <td>{ if s.note().is_empty() { left_deg.map_or_else(String::new, |d| signed(d, 2)) } else { s.note().into() } }</td>
+            <td title={s.note()}>{ if s.note().is_empty() { left_deg.map_or_else(String::new, |d| signed(d, 2)) } else { NO_FIGURE.into() } }</td>
         </tr>
     }
 }
