@@ -29,7 +29,7 @@ pub(super) fn WishBoxes(props: &WishBoxesProps) -> Html {
     let act = use_act();
     let state = &props.state;
     let aims = use_memo(props.rig.clone(), |rig| Wish::of(&rig.0).aims);
-    let points = state.job().flight_points.iter().map(|point| point_row(&act, point, &aims));
+    let points = state.job().flight_points.iter().map(|point| point_rows(&act, point, &aims));
     let limits = LimitFigure::ALL.into_iter().map(|figure| {
         html! { <Labelled shown={Shown::of(state, &[], Field::Limit(figure))} label={capital(figure.name())} hint="no limit" /> }
     });
@@ -68,22 +68,28 @@ fn possible(point: &FlightPoint) -> Vec<Figure> {
     ALL.into_iter().filter(may).collect()
 }
 
-fn point_row(act: &Act, point: &FlightPoint, aims: &[Aim]) -> Html {
-    let figures = possible(point);
-    let place = aims.iter().position(|a| a.flight_point == point.name);
+/// A row for each figure that counts at a flight point, and one more to pick from.
+fn point_rows(act: &Act, point: &FlightPoint, aims: &[Aim]) -> Html {
+    let here = |(i, aim): (usize, &Aim)| (aim.flight_point == point.name).then_some(i);
+    let places = aims.iter().enumerate().filter_map(here).map(Some).chain([None]);
+    html! { { for places.enumerate().map(|(n, place)| aim_row(act, point, aims, place, n > 0)) } }
+}
+
+fn aim_row(act: &Act, point: &FlightPoint, aims: &[Aim], place: Option<usize>, more: bool) -> Html {
     let aim = place.map(|i| &aims[i]);
-    let mut options: Vec<AttrValue> = vec!["does not count".into()];
+    let taken = |figure: &Figure| {
+        let counts = |a: &Aim| a.flight_point == point.name && a.figure == *figure;
+        aim.is_none_or(|a| a.figure != *figure) && aims.iter().any(counts)
+    };
+    let figures: Vec<Figure> = possible(point).into_iter().filter(|figure| !taken(figure)).collect();
+    if figures.is_empty() {
+        return html! {};
+    }
+    let none = if more && place.is_none() { "nothing more" } else { "does not count" };
+    let mut options: Vec<AttrValue> = vec![none.into()];
     options.extend(figures.iter().map(|f| AttrValue::from(name(*f))));
     let picked = aim.map_or(Some(0), |a| figures.iter().position(|f| *f == a.figure).map(|i| i + 1));
-    let changed = |with: Option<Aim>| {
-        let mut next = aims.to_vec();
-        match (place, with) {
-            (Some(i), Some(aim)) => next[i] = aim,
-            (Some(i), None) => drop(next.remove(i)),
-            (None, with) => next.extend(with),
-        }
-        next
-    };
+    let changed = |with: Option<Aim>| changed(aims, place, with);
     let weight = aim.map_or(1.0, |a| a.weight);
     let with = |figure: Option<Figure>| {
         changed(figure.map(|figure| Aim { flight_point: point.name.clone(), figure, weight }))
@@ -96,12 +102,23 @@ fn point_row(act: &Act, point: &FlightPoint, aims: &[Aim]) -> Html {
     let now = WEIGHTS.iter().position(|w| (w - weight).abs() < 1e-9);
     html! {
         <div class="wish">
-            <Pick label={point.name.clone()} {options} {picked} onpick={picked_of(act, choices)} />
+            <Pick label={if more { format!("{}, and", point.name) } else { point.name.clone() }} {options} {picked} onpick={picked_of(act, choices)} />
             if aim.is_some() {
-                <Pick label={format!("Weight of {}", point.name)} options={weights} picked={now} onpick={picked_of(act, weighted)} bare=true />
+                <Pick label={format!("Weight of {}, {}", point.name, aim.map_or("", |a| name(a.figure)))} options={weights} picked={now} onpick={picked_of(act, weighted)} bare=true />
             }
         </div>
     }
+}
+
+/// The aims with one put in its place, added or taken out.
+fn changed(aims: &[Aim], place: Option<usize>, with: Option<Aim>) -> Vec<Aim> {
+    let mut next = aims.to_vec();
+    match (place, with) {
+        (Some(i), Some(aim)) => next[i] = aim,
+        (Some(i), None) => drop(next.remove(i)),
+        (None, with) => next.extend(with),
+    }
+    next
 }
 
 /// The rpm allowed at a flight point.
