@@ -112,6 +112,53 @@ fn past_the_limit_rpm_the_figure_held_at_it_is_given_beside_the_state() {
     assert!(marks.limit_rpm_from_m_s.unwrap() < marks.top_speed.unwrap().airspeed_m_s);
 }
 
+/// A propeller that passes the limit rpm at rest may take more with speed, and less again: held, matched and held once more, and nowhere more power
+/// than the engine has.
+#[test]
+fn what_is_past_the_limit_at_rest_need_not_be_in_flight() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    piston.max_rpm = Some(2800.0);
+    let rig = Rig::new(&job).unwrap();
+    let shaft = rig.shaft.as_ref().unwrap();
+    let air = air_of(&full(None)).unwrap();
+    let found = range(&job, 60);
+    let told: Vec<_> = found.points.iter().filter_map(|p| p.full.as_ref()).collect();
+    for f in &told {
+        let most = shaft.available_w(f.rpm, &air).unwrap();
+        assert!(f.power_w <= most * (1.0 + 1e-6), "{} of {most} W at {} rpm", f.power_w, f.rpm);
+        assert!(f.held_at_limit || (f.power_w / most - 1.0).abs() < 1e-5, "{f:?}");
+    }
+    let held: Vec<bool> = told.iter().map(|f| f.held_at_limit).collect();
+    let first_matched = held.iter().position(|h| !h).unwrap();
+    let last_matched = held.iter().rposition(|h| !h).unwrap();
+    assert!(first_matched > 0 && last_matched + 1 < held.len(), "{held:?}");
+    assert!(held[first_matched..=last_matched].iter().all(|h| !h), "{held:?}");
+    // The line of the departure map is the same.
+    let at = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 280.0, turn_rad: 0.0 };
+    let line = spokeshave::fit::line(&rig, &at, 60);
+    let least = line.iter().map(|c| c.rotation_rad_s).fold(f64::INFINITY, f64::min);
+    assert!(least < 0.98 * line[0].rotation_rad_s, "{least} {}", line[0].rotation_rad_s);
+}
+
+/// What is longest or steepest does not depend on where the points happen to lie.
+#[test]
+fn marks_do_not_depend_on_the_count_of_speeds() {
+    for index in 0..3 {
+        let [few, many] = [20, 90].map(|count| range(&demo(index), count).marks);
+        let pairs = [
+            (few.best_endurance, many.best_endurance),
+            (few.best_angle_of_climb, many.best_angle_of_climb),
+            (few.best_rate_of_climb, many.best_rate_of_climb),
+            (few.best_range, many.best_range),
+        ];
+        for (few, many) in pairs {
+            let (Some(few), Some(many)) = (few, many) else { continue };
+            assert!((few.value / many.value - 1.0).abs() < 3e-3, "{index}: {few:?} {many:?}");
+        }
+    }
+}
+
 #[test]
 fn what_cannot_be_is_told_and_gives_no_figures() {
     let mut weak = demo(0);

@@ -126,13 +126,13 @@ impl<'r> Course<'r> {
             .iter()
             .map(|&v| {
                 let at = self.here(v);
-                // Once past the limit rpm, more speed only leads farther past it.
-                let full = if held {
-                    self.solver.held_at_limit(&at).ok_or(State::OverLimitRpm)
-                } else {
-                    self.solver.full(&at, &mut trail)
+                // Once past the limit rpm, a look at that rpm tells whether it still is: near rest a propeller may come to take more with speed.
+                let past = if held { self.solver.past_limit(&at) } else { None };
+                let full = past.unwrap_or_else(|| self.solver.full(&at, &mut trail));
+                held = match &full {
+                    Ok(f) => f.held,
+                    Err(state) => *state == State::OverLimitRpm,
                 };
-                held |= full.as_ref().is_ok_and(|f| f.held);
                 followed.extend(trail.last().filter(|met| full.is_ok() && met.condition.airspeed_m_s == v));
                 full
             })

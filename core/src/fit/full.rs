@@ -50,6 +50,19 @@ impl Solver<'_> {
         }
     }
 
+    /// The limit rpm, throttled back, or that the air alone drives the propeller past it, where full throttle gives more than the propeller takes there;
+    /// `None` where it does not: then full throttle may be matched below the limit.
+    pub(super) fn past_limit(&self, at: &Condition) -> Option<Result<Full, State>> {
+        let shaft = self.rig.shaft.as_ref()?;
+        let rpm = highest_rpm(shaft);
+        let condition = run_up(self.rig, at, rpm);
+        let loads = self.loads(&condition);
+        let taken_w = power_w(&loads, &condition);
+        let past = shaft.available_w(rpm, &at.air).is_none_or(|offered_w| taken_w < offered_w);
+        let held = (taken_w > 0.0).then_some(Full { condition, loads, held: true });
+        past.then(|| held.ok_or(State::OverLimitRpm))
+    }
+
     /// The limit rpm, throttled back; `None` where the air alone drives the propeller there, which no throttle holds.
     pub(super) fn held_at_limit(&self, at: &Condition) -> Option<Full> {
         let shaft = self.rig.shaft.as_ref()?;

@@ -102,23 +102,22 @@ fn full_throttle(rig: &Rig, at: &Condition, speeds: impl Iterator<Item = f64>) -
     let Some(shaft) = &rig.shaft else { return Vec::new() };
     let highest = highest_rpm(shaft);
     let mut trail = Trail::default();
-    let (mut matched, mut held) = (false, false);
+    let solver = Solver::new(rig);
+    let mut held = false;
     speeds
         .map_while(|v| {
             let here = Condition { airspeed_m_s: v, ..*at };
-            let at_limit = run_up(rig, &here, highest);
+            let full = if held && solver.past_limit(&here).is_some() {
+                Err(State::OverLimitRpm)
+            } else {
+                solver.throttle(&here, 1.0, &trail)
+            };
+            held = full.as_ref().is_err_and(|e| *e == State::OverLimitRpm);
             if held {
-                return Some(at_limit);
-            }
-            let full = Solver::new(rig).throttle(&here, 1.0, &trail);
-            // Only past a speed that was matched: a propeller too fine to be run up at rest has no such line.
-            held = matched && full.as_ref().is_err_and(|e| *e == State::OverLimitRpm);
-            if held {
-                return Some(at_limit);
+                return Some(run_up(rig, &here, highest));
             }
             let met = full.ok()?;
             trail.push(&met);
-            matched = true;
             Some(met.condition)
         })
         .collect()

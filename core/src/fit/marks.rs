@@ -9,6 +9,7 @@ use super::idle::idle;
 use super::trail::Trail;
 use super::{Solver, rpm_of};
 use crate::aircraft::propellers;
+use crate::job::Aircraft;
 use crate::result::{EnvelopePoint, FullThrottle, Level, Mark, Marks, State, TIP_MACHS, TipMach};
 use crate::rig::Rig;
 use crate::rotor::Condition;
@@ -32,15 +33,30 @@ pub(super) fn marks(
         let met = solver.level(&here(v), &Trail::beside(&followed.level, v)).ok()?;
         Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
     };
+    // The slowest flight counts too: what is best there would else depend on how near to it a point happens to lie.
+    let hovers = matches!(rig.aircraft, Some(Aircraft::Multirotor(_)));
+    let slowest = (hovers || stall > 0.0).then_some(stall);
     let climb = |of: fn(&FullThrottle) -> Option<f64>| {
-        let v = summit(points, stall, |p| p.full.as_ref().and_then(of))?;
+        let first = slowest.and_then(|v| Some((v, full(v).as_ref().and_then(of)?)));
+        let v = summit(points, stall, first, |p| p.full.as_ref().and_then(of))?;
         let f = full(v)?;
-        of(&f).map(|value| Mark { airspeed_m_s: v, rpm: f.rpm, value, held_at_limit: f.held_at_limit })
+        of(&f).filter(|value| *value > 0.0).map(|value| Mark {
+            airspeed_m_s: v,
+            rpm: f.rpm,
+            value,
+            held_at_limit: f.held_at_limit,
+        })
     };
     let cruise = |of: fn(&Level) -> Option<f64>| {
-        let v = summit(points, stall, |p| p.level.as_ref().and_then(of))?;
+        let first = slowest.and_then(|v| Some((v, flight(v).as_ref().and_then(of)?)));
+        let v = summit(points, stall, first, |p| p.level.as_ref().and_then(of))?;
         let l = flight(v)?;
-        of(&l).map(|value| Mark { airspeed_m_s: v, rpm: l.rpm, value, held_at_limit: false })
+        of(&l).filter(|value| *value > 0.0).map(|value| Mark {
+            airspeed_m_s: v,
+            rpm: l.rpm,
+            value,
+            held_at_limit: false,
+        })
     };
     Marks {
         best_rate_of_climb: climb(|f| f.rate_of_climb_m_s),
@@ -76,13 +92,18 @@ fn driven(rig: &Rig, f: &Full) -> Mark {
 }
 
 /// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or the
-/// highest point where it is at an end. Only speeds above rest and from the stall on count.
-fn summit(points: &[EnvelopePoint], stall: f64, of: impl Fn(&EnvelopePoint) -> Option<f64>) -> Option<f64> {
-    let values: Vec<(f64, f64)> = points
-        .iter()
-        .filter(|p| p.airspeed_m_s > 0.0 && p.airspeed_m_s >= stall)
-        .filter_map(|p| of(p).map(|value| (p.airspeed_m_s, value)))
-        .collect();
+/// highest point where it is at an end. Only speeds above rest and from the slowest flight on count, whose speed and value come first where they are
+/// known.
+fn summit(
+    points: &[EnvelopePoint],
+    stall: f64,
+    slowest: Option<(f64, f64)>,
+    of: impl Fn(&EnvelopePoint) -> Option<f64>,
+) -> Option<f64> {
+    let least = if slowest.is_some() { stall * (1.0 + 1e-6) } else { stall };
+    let later = points.iter().filter(|p| p.airspeed_m_s > 0.0 && p.airspeed_m_s >= least);
+    let later = later.filter_map(|p| of(p).map(|value| (p.airspeed_m_s, value)));
+    let values: Vec<(f64, f64)> = slowest.into_iter().chain(later).collect();
     let top = (0..values.len()).max_by(|&a, &b| values[a].1.total_cmp(&values[b].1))?;
     let at = |i: usize| values.get(i).copied();
     let (Some(a), Some(b), Some(c)) = (top.checked_sub(1).and_then(at), at(top), at(top + 1)) else {

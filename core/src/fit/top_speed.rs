@@ -95,8 +95,8 @@ impl<'r> Chase<'r> {
                     }
                     _ => limit = State::OutOfReach,
                 },
-                // Too slow for the engine to turn it; the wind of more speed may help.
-                Err(State::EngineCannotTurnIt) if last.is_none() => limit = State::EngineCannotTurnIt,
+                // Too slow for the engine to turn it, from rest or after the propeller has come to take more; the wind of more speed may help.
+                Err(State::EngineCannotTurnIt) => (last, limit) = (None, State::EngineCannotTurnIt),
                 // Past the engine's range before thrust falls to drag: that is what stops the aircraft.
                 Err(state) => {
                     limit = state;
