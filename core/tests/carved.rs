@@ -193,7 +193,9 @@ fn a_blade_left_full_is_brought_to_the_drawing() {
     let plan = carved::plan(&rig, carved::usual_point(&rig)).unwrap();
     assert_eq!(plan.flight_point, "Climb");
     for s in plan.blades.iter().flat_map(|b| &b.stations).filter(|s| s.radius_m > 0.2) {
-        assert!((s.angle_deg - s.wanted_deg).abs() < 0.05, "{s:?}");
+        // Less than a tenth of a millimetre over the chord is not worth a cut.
+        let off_mm = 1e3 * s.chord_m * (s.angle_deg - s.wanted_deg).to_radians().abs();
+        assert!(off_mm < 0.11, "{off_mm} {s:?}");
     }
     let (before, after) = (carved::analyse(&rig).unwrap(), &plan.after);
     let worst = |c: &spokeshave::result::Carved| {
@@ -394,25 +396,37 @@ proptest! {
 }
 
 #[test]
-fn nothing_is_cut_where_nothing_was_read() {
-    // Both blades 1.5 degrees coarse: the first read up to station 8, the second not at all.
+fn nothing_is_cut_where_a_blade_was_not_read() {
+    // Both blades 1.5 degrees coarse: the first read up to station 8, the second up to station 6.
     let mut job = carved_by(|_, _| [1.5, 0.0, 0.0]).job.clone();
-    let blades = &mut job.carved.as_mut().unwrap().blades;
-    blades[0].readings.truncate(8);
-    blades[1].readings.clear();
-    let plan = carved::plan(&Rig::new(&job).unwrap(), 2).unwrap();
-    let cut = |b: usize, s: usize| {
-        let p = &plan.blades[b].stations[s];
-        p.face_leading_m + p.face_trailing_m + p.back_m + p.trailing_edge_m
+    let cut_short = |job: &mut Job, blade: usize, count: usize| {
+        job.carved.as_mut().unwrap().blades[blade].readings.truncate(count);
     };
-    assert!((2..7).all(|s| cut(0, s) > 0.0) && plan.blades[0].stations[..8].iter().all(|s| s.read));
-    assert!((8..11).all(|s| cut(0, s) == 0.0 && !plan.blades[0].stations[s].read));
-    assert!((0..11).all(|s| cut(1, s) == 0.0 && !plan.blades[1].stations[s].note().is_empty()));
-    // The blade that was read goes all the way to what is wanted, and not half of it towards one that is not known.
-    for p in &plan.blades[0].stations[2..7] {
-        let aim = p.wanted_deg.clamp(p.reachable_deg.0, p.reachable_deg.1);
-        assert!((p.angle_deg - aim).abs() < 0.05 || p.chord_lost_m > 0.0, "{p:?}");
+    cut_short(&mut job, 0, 8);
+    cut_short(&mut job, 1, 6);
+    let plan = carved::plan(&Rig::new(&job).unwrap(), 2).unwrap();
+    for blade in &plan.blades {
+        for (s, p) in blade.stations.iter().enumerate() {
+            let cut = p.face_leading_m + p.face_trailing_m + p.back_m + p.trailing_edge_m;
+            assert_eq!((cut > 0.0, p.read), (s < 6, s < 6), "{} {s} {p:?}", blade.blade);
+        }
     }
+    // A blade without any reading: none is cut.
+    cut_short(&mut job, 1, 0);
+    let why = carved::plan(&Rig::new(&job).unwrap(), 2).unwrap_err();
+    assert_eq!(why, carved::CarvedError::Unread(2));
+}
+
+#[test]
+fn what_the_cuts_do_to_balance_is_said() {
+    // The coarse blade is cut, and is the lighter one then.
+    let rig = carved_by(|b, _| if b == 0 { [1.2, 0.0, 0.0] } else { [0.0; 3] });
+    let (before, plan) = (carved::analyse(&rig).unwrap(), carved::plan(&rig, 2).unwrap());
+    let grams = plan.after.balance.grams_at_tip;
+    assert!(before.balance.grams_at_tip < 0.1 && grams > 0.5, "{grams}");
+    let warns = plan.warns(&before).join(" ");
+    assert!(warns.contains("balance worse") && warns.contains("back of blade 2"), "{warns}");
+    assert!(warns.contains(&format!("{:.1} g", grams / 0.75)), "{warns}");
 }
 
 #[test]

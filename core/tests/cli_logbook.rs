@@ -41,12 +41,12 @@ fn readings_are_told_for_people_for_programs_as_a_sheet_and_as_a_job() {
 fn what_to_change_is_told_with_its_side_effects() {
     let o = run(&["logbook", "--demo", "light-aeroplane", "--point", "Climb", "--want-rpm", "2800"], "");
     assert_eq!(o.status.code(), Some(0), "{}", err(&o));
-    for said in ["Wanted at Climb: 2800 rpm", "over the whole blade", "mm of diameter", "changed"] {
+    for said in ["Wanted at Climb: 2800 rpm", "The whole blade turned", "mm of diameter", "changed"] {
         assert!(out(&o).contains(said), "{said}: {}", out(&o));
     }
     let o = run(&["logbook", "--demo", "light-aeroplane", "--point", "Top speed", "--want-km-h", "400"], "");
     assert_eq!(o.status.code(), Some(1), "{}", err(&o));
-    assert!(out(&o).contains("not reached"));
+    assert!(out(&o).contains("Not reached"));
 }
 
 #[test]

@@ -42,7 +42,7 @@ fn full() -> Job {
 }
 
 fn pages(job: &Job) -> Vec<Sheet> {
-    dossier(&Rig::new(job).unwrap(), &Scales::METRIC, Paper::A4)
+    dossier(&Rig::new(job).unwrap(), &Scales::METRIC, Paper::A4, None)
 }
 
 fn words(pages: &[Sheet]) -> Vec<String> {
@@ -122,7 +122,7 @@ fn words_stay_on_the_page_and_apart() {
         .collect();
     for job in [demo(0), demo(1), demo(2), full(), many] {
         for (paper, scales) in [(Paper::A4, Scales::METRIC), (Paper::Letter, Scales::INCHES)] {
-            for page in dossier(&Rig::new(&job).unwrap(), &scales, paper) {
+            for page in dossier(&Rig::new(&job).unwrap(), &scales, paper, None) {
                 words_apart(&page);
                 let [low, high] = page.views[0].window_mm;
                 for item in &page.views[0].drawing.items {

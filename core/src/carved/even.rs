@@ -20,21 +20,9 @@ pub(super) fn evened(wanted: f64, bounds: &[(f64, f64)]) -> Vec<f64> {
     x
 }
 
-/// The same where only some blades were read: the others are not known well enough to be matched, and stay at their upper bound, which is what they
-/// are.
-pub(super) fn evened_read(wanted: f64, bounds: &[(f64, f64)], read: impl Iterator<Item = bool>) -> Vec<f64> {
-    let who: Vec<usize> = read.enumerate().filter_map(|(i, read)| read.then_some(i)).collect();
-    let among: Vec<(f64, f64)> = who.iter().map(|&i| bounds[i]).collect();
-    let mut all: Vec<f64> = bounds.iter().map(|b| b.1).collect();
-    for (&i, value) in who.iter().zip(evened(wanted, &among)) {
-        all[i] = value;
-    }
-    all
-}
-
 #[cfg(test)]
 mod tests {
-    use super::{evened, evened_read};
+    use super::evened;
 
     /// Closed form: with one value held at h, the least of (x − w)² + (x − h)²/2 is at (2 w + h)/3.
     #[test]
@@ -43,11 +31,5 @@ mod tests {
         assert!((x[0] - 9.0).abs() < 1e-9 && x[1] == 7.0, "{x:?}");
         assert_eq!(evened(10.0, &[(0.0, 20.0), (0.0, 30.0)]), [10.0, 10.0]);
         assert_eq!(evened(10.0, &[(0.0, 8.0)]), [8.0]);
-    }
-    #[test]
-    fn a_blade_that_was_not_read_draws_no_other_to_itself() {
-        let bounds = [(0.0, 20.0), (7.0, 7.0)];
-        assert_eq!(evened_read(10.0, &bounds, [true, false].into_iter()), [10.0, 7.0]);
-        assert_eq!(evened_read(10.0, &bounds, [false, false].into_iter()), [20.0, 7.0]);
     }
 }

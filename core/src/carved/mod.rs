@@ -21,7 +21,7 @@ pub use doubt::doubts;
 pub use import::{angle_of, minutes_fault};
 pub use load::{analyse, analysed, mean_rig};
 pub use measured::{Measured, Size};
-pub use plan::{plan, planed, usual_point};
+pub use plan::{plan, planed, planing, usual_point};
 pub use plane::{Cuts, Profile, Slab};
 
 use thiserror::Error;
@@ -45,6 +45,11 @@ pub enum CarvedError {
     /// A flight point without an answer for the drawn blade.
     #[error("{0} has no answer with the drawn blade; the removals are judged at a flight point that has one")]
     NoAnswer(String),
+    /// A blade without readings, beside which no other may be cut.
+    #[error(
+        "blade {0} has no reading that counts: read every blade before one is cut, for a blade cut alone may be set farther from the others"
+    )]
+    Unread(usize),
     /// The carved blade is not one a job may have.
     #[error("the readings give a blade that cannot be: {}", .0.iter().map(ToString::to_string).collect::<Vec<_>>().join("; "))]
     Refused(Vec<Problem>),

@@ -5,10 +5,10 @@
 //! ([`super::plane`]) each blade takes the angle of least squares both from the wanted one and from the mean of the
 //! blades; chord and thickness likewise, from the drawn ones. Planing at a thin trailing edge costs chord: where less than the drawn chord would
 //! be left, the turn stops where the angle that is still wrong weighs as much as the chord that is lost. Small differences that no plane would set right are left,
-//! and nothing is cut where nothing was read: beyond the outermost readings, and on a blade without any.
+//! and nothing is cut where a blade was not read: beyond its outermost readings, and nowhere where one has none.
 
 use super::CarvedError;
-use super::even::evened_read;
+use super::even::evened;
 use super::load::{Set, analysed};
 use super::measured::{Measured, Size};
 use super::plane::{Cuts, Profile, Slab};
@@ -23,7 +23,7 @@ use crate::rotor::Condition;
 const WIDEST_RAD: f64 = 0.2;
 /// Halvings of the turn: to less than a millionth of a degree.
 const HALVINGS: u32 = 40;
-/// What is not worth a cut: angle, rad; depth off back or edge, m.
+/// What is not worth a cut: angle, rad; depth, m.
 const LEAST_TURN_RAD: f64 = 0.02 * std::f64::consts::PI / 180.0;
 const LEAST_CUT_M: f64 = 0.1e-3;
 /// What a lost share of chord weighs as an angle, rad: load goes with chord as `Δc/c` and with angle as `a Δα/cl`, for a lift slope of 5.7 a radian and
@@ -52,6 +52,9 @@ pub fn usual_point(rig: &Rig) -> usize {
 /// No readings; no such flight point or none with an answer; readings of a blade that cannot be.
 pub fn plan(rig: &Rig, point: usize) -> Result<RemovalPlan, CarvedError> {
     let measured = Measured::new(rig)?;
+    if let Some(blade) = measured.read.iter().position(|read| !read) {
+        return Err(CarvedError::Unread(blade + 1));
+    }
     let name = rig.job.flight_points.get(point).map_or_else(|| point.to_string(), |p| p.name.clone());
     let at = rig.job.flight_points.get(point).and_then(|p| fit::condition(rig, p, air_of(p).ok()?).ok());
     let at = at.ok_or_else(|| CarvedError::NoAnswer(name.clone()))?;
@@ -60,11 +63,7 @@ pub fn plan(rig: &Rig, point: usize) -> Result<RemovalPlan, CarvedError> {
     let first = bench.planned(&drawn);
     let wanted = wanted(rig, &bench.after(&first), &at)?;
     let planned = bench.planned(&wanted);
-    let after = bench.after(&planned);
-    let blades = (0..measured.blades.len())
-        .map(|b| PlannedBlade { blade: b + 1, stations: planned.iter().map(|s| s[b].clone()).collect() })
-        .collect();
-    Ok(RemovalPlan { flight_point: name, blades, after: analysed(rig, &after)? })
+    bench.told(rig, point, &planned)
 }
 
 /// The angle at each radius that gives the drawn departure with the sizes of a plan, rad.
@@ -83,22 +82,42 @@ fn wanted(rig: &Rig, planned: &Measured, at: &Condition) -> Result<Vec<f64>, Car
 }
 
 /// The blades with every face planed by an angle (rad) that is wanted at its radius, as far as the least chord and thickness allow.
-/// Stations without a flat face stay as they are.
+/// Stations without a flat face, or where a blade was not read, stay as they are.
 #[must_use]
 pub fn planed(rig: &Rig, measured: &Measured, wanted_rad: impl Fn(f64) -> f64) -> Measured {
     let bench = Bench::new(rig, measured);
     let mut after = measured.clone();
     for (s, &r) in measured.radii_m.iter().enumerate() {
-        let wanted = wanted_rad(r);
-        for size in after.blades.iter_mut().map(|blade| &mut blade[s]) {
-            let piece = bench.piece(s, size);
-            let turn = wanted.clamp(piece.farthest(-1.0), piece.farthest(1.0));
-            let slab = piece.turned(turn);
-            size.angle_rad = slab.face_rad + piece.face_to_chord(&slab);
-            (size.chord_m, size.thickness_m) = (slab.chord_m, slab.thickness_m);
+        for (blade, piece) in after.blades.iter_mut().zip(bench.pieces(s)) {
+            let slab = piece.turned(piece.within_reach(wanted_rad(r)));
+            blade[s].angle_rad = slab.face_rad + piece.face_to_chord(&slab);
+            (blade[s].chord_m, blade[s].thickness_m) = (slab.chord_m, slab.thickness_m);
         }
     }
     after
+}
+
+/// The same as what to take off each blade, and what comes of it; the flight point is that for which it is done.
+///
+/// # Errors
+/// No readings; blades that cannot be.
+pub fn planing(
+    rig: &Rig,
+    measured: &Measured,
+    point: usize,
+    wanted_rad: impl Fn(f64) -> f64,
+) -> Result<RemovalPlan, CarvedError> {
+    let bench = Bench::new(rig, measured);
+    let station = |(s, r): (usize, &f64)| {
+        let wanted = wanted_rad(*r);
+        let one = |piece: &Piece| {
+            let whole = (piece.slab.chord_m, piece.slab.thickness_m);
+            piece.told(piece.within_reach(wanted), whole, piece.angle(0.0, whole) + wanted)
+        };
+        bench.pieces(s).iter().map(one).collect()
+    };
+    let planned: Vec<Vec<PlannedStation>> = measured.radii_m.iter().enumerate().map(station).collect();
+    bench.told(rig, point, &planned)
 }
 
 /// The blades on the bench.
@@ -140,6 +159,24 @@ impl<'r> Bench<'r> {
         wanted_rad.iter().enumerate().map(|(s, wanted)| self.station(s, *wanted)).collect()
     }
 
+    /// A plan with what comes of it.
+    fn told(
+        &self,
+        rig: &Rig,
+        point: usize,
+        planned: &[Vec<PlannedStation>],
+    ) -> Result<RemovalPlan, CarvedError> {
+        let blade = |b: usize| PlannedBlade {
+            blade: b + 1,
+            stations: planned.iter().map(|s| s[b].clone()).collect(),
+        };
+        Ok(RemovalPlan {
+            flight_point: rig.job.flight_points.get(point).map_or_else(String::new, |p| p.name.clone()),
+            blades: (0..self.measured.blades.len()).map(blade).collect(),
+            after: analysed(rig, &self.after(planned))?,
+        })
+    }
+
     /// The blades as a plan leaves them.
     fn after(&self, planned: &[Vec<PlannedStation>]) -> Measured {
         let mut after = self.measured.clone();
@@ -154,8 +191,14 @@ impl<'r> Bench<'r> {
         after
     }
 
+    /// The blades at a radius. They are cut where all of them were read: one that is turned beside another that is not known may be set farther from it.
+    fn pieces(&self, s: usize) -> Vec<Piece<'_>> {
+        let read = [0, 1, 2].map(|k| self.measured.blades.iter().all(|blade| is_read(blade[s].known[k])));
+        self.measured.blades.iter().map(|blade| self.piece(s, &blade[s], read)).collect()
+    }
+
     fn station(&self, s: usize, wanted_rad: f64) -> Vec<PlannedStation> {
-        let pieces: Vec<Piece> = self.measured.blades.iter().map(|blade| self.piece(s, &blade[s])).collect();
+        let pieces = self.pieces(s);
         let cut = self.rig.rotor.blade.cut(self.measured.radii_m[s]);
         let (drawn_chord, drawn_thickness) = (cut.chord_m, cut.thickness_ratio * cut.chord_m);
         let mut turns = vec![0.0; pieces.len()];
@@ -166,11 +209,9 @@ impl<'r> Bench<'r> {
             let bound = |least: f64, now: f64| (least.min(now), now);
             let chords: Vec<_> = wedged.iter().map(|w| bound(self.least[s].0, w.chord_m)).collect();
             let thick: Vec<_> = wedged.iter().map(|w| bound(self.least[s].1, w.thickness_m)).collect();
-            let read = |k: usize| pieces.iter().map(move |p| p.read[k]);
-            let chords = evened_read(drawn_chord, &chords, read(1));
-            goals = chords.into_iter().zip(evened_read(drawn_thickness, &thick, read(2))).collect();
+            goals = evened(drawn_chord, &chords).into_iter().zip(evened(drawn_thickness, &thick)).collect();
             let reach: Vec<(f64, f64)> = pieces.iter().zip(&goals).map(|(p, g)| p.reach(*g)).collect();
-            let angles = evened_read(wanted_rad, &reach, read(0));
+            let angles = evened(wanted_rad, &reach);
             let weighed = |((p, a), g): ((&Piece, &f64), &(f64, f64))| p.weighed(*a, *g, drawn_chord);
             turns = pieces.iter().zip(&angles).zip(&goals).map(weighed).collect();
         }
@@ -182,7 +223,7 @@ impl<'r> Bench<'r> {
             .collect()
     }
 
-    fn piece(&self, s: usize, size: &Size) -> Piece<'_> {
+    fn piece(&self, s: usize, size: &Size, read: [bool; 3]) -> Piece<'_> {
         let radius_m = self.measured.radii_m[s];
         let mut piece = Piece {
             rig: self.rig,
@@ -190,11 +231,16 @@ impl<'r> Bench<'r> {
             profile: self.profiles[s].as_ref(),
             slab: Slab { face_rad: 0.0, chord_m: size.chord_m, thickness_m: size.thickness_m },
             least: self.least[s],
-            read: size.known.map(|known| matches!(known, Known::Measured | Known::Interpolated)),
+            read,
         };
         piece.slab.face_rad = size.angle_rad - piece.face_to_chord(&piece.slab);
         piece
     }
+}
+
+/// Whether a size was read there, or on both sides of there.
+fn is_read(known: Known) -> bool {
+    matches!(known, Known::Measured | Known::Interpolated)
 }
 
 /// One blade at one radius.
@@ -204,7 +250,7 @@ struct Piece<'a> {
     profile: Option<&'a Profile>,
     slab: Slab,
     least: (f64, f64),
-    /// Whether angle, chord and thickness were read here or on both sides of here.
+    /// Whether angle, chord and thickness were read here or on both sides of here, on every blade.
     read: [bool; 3],
 }
 
@@ -263,6 +309,11 @@ impl Piece<'_> {
         sign * good
     }
 
+    /// A turn as far as it goes.
+    fn within_reach(&self, turn_rad: f64) -> f64 {
+        turn_rad.clamp(self.farthest(-1.0), self.farthest(1.0))
+    }
+
     /// Least and greatest angle to the chord line that can be had, rad.
     fn reach(&self, goal: (f64, f64)) -> (f64, f64) {
         (self.angle(self.farthest(-1.0), goal), self.angle(self.farthest(1.0), goal))
@@ -270,7 +321,8 @@ impl Piece<'_> {
 
     /// The turn that gives an angle to the chord line, rad.
     fn turn_to(&self, angle_rad: f64, goal: (f64, f64)) -> f64 {
-        if (self.angle(0.0, goal) - angle_rad).abs() < LEAST_TURN_RAD {
+        let off = (self.angle(0.0, goal) - angle_rad).abs();
+        if off < LEAST_TURN_RAD || off.tan() * self.slab.chord_m < LEAST_CUT_M {
             return 0.0;
         }
         let (mut low, mut high) = (self.farthest(-1.0), self.farthest(1.0));

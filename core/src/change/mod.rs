@@ -155,6 +155,8 @@ fn change(
         had: figure(&at, wanted.figure),
         state: at.state,
         by_removal: base.is_wood(),
+        had_deg: had_deg(base.rig(), &rig, means),
+        plan: base.planing(means, amount, wanted.point),
         diameter_m: rig.job.propeller.diameter_m,
         pitch_m: rig.rotor.blade.pitch_075_m(rig.turn_rad()),
         flight_points: before
@@ -164,6 +166,17 @@ fn change(
             .map(|(drawn, shaped)| Compared { drawn, shaped })
             .collect(),
     }
+}
+
+/// How far the blade has turned where it tells: at three quarters of the radius, or at the tip where only the outer half turns, degrees.
+fn had_deg(before: &Rig, after: &Rig, means: Means) -> Option<f64> {
+    let share = match means {
+        Means::Pitch => 0.75,
+        Means::Twist => 1.0,
+        Means::Diameter => return None,
+    };
+    let angle = |rig: &Rig| rig.rotor.blade.cut(share * rig.rotor.blade.radius_m).angle_rad;
+    Some((angle(after) - angle(before)).to_degrees())
 }
 
 /// The amount nearest to nothing at which the mismatch is nothing; else the one of least mismatch that was looked at.

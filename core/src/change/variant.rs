@@ -1,9 +1,9 @@
 //! The propeller with a change made.
 
 use super::{DIAMETERS, MOST_TURN_DEG};
-use crate::carved::{Measured, mean_rig, planed};
+use crate::carved::{Measured, mean_rig, planed, planing};
 use crate::job::{AngleReference, Propeller};
-use crate::result::Means;
+use crate::result::{Means, RemovalPlan};
 use crate::rig::Rig;
 use crate::shape::{PitchBy, sized};
 
@@ -37,10 +37,22 @@ impl<'r> Base<'r> {
         }
     }
 
+    /// What to take off carved blades for an amount; `None` where there is no wood, and for the tips.
+    pub(super) fn planing(&self, means: Means, amount: f64, point: usize) -> Option<RemovalPlan> {
+        let (measured, _) = self.wood.as_ref().filter(|_| means != Means::Diameter)?;
+        let share = self.share(means);
+        planing(self.drawn, measured, point, |r| amount.to_radians() * share(r)).ok()
+    }
+
+    /// Which share of a turn each radius has.
+    fn share(&self, means: Means) -> impl Fn(f64) -> f64 + use<> {
+        let tip_m = self.drawn.rotor.blade.radius_m;
+        move |r: f64| if means == Means::Pitch { 1.0 } else { (2.0 * r / tip_m - 1.0).max(0.0) }
+    }
+
     /// The propeller with an amount of change; `None` where it cannot be.
     pub(super) fn changed(&self, means: Means, amount: f64) -> Option<Rig> {
-        let tip_m = self.drawn.rotor.blade.radius_m;
-        let share = |r: f64| if means == Means::Pitch { 1.0 } else { (2.0 * r / tip_m - 1.0).max(0.0) };
+        let share = self.share(means);
         match (means, &self.wood) {
             (Means::Diameter, _) => self.resized(amount),
             (_, Some((measured, _))) => {

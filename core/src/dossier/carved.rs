@@ -1,7 +1,6 @@
 //! The blades as measured, and what to take off.
 
 use crate::bench::sheet::table::{figures, words};
-use crate::carved::{analyse, plan};
 use crate::result::{
     Brief, Carved, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, Known, PlannedBlade,
     PlannedStation, RemovalPlan,
@@ -18,11 +17,9 @@ use super::verdict;
 const READ: Scale = Scale::fixed("°", 1.0, 2);
 
 pub(super) fn write(flow: &mut Flow, told: &Told) {
-    if told.rig.job.carved.is_none() {
-        return;
-    }
+    let (Some(found), Some(plan)) = (&told.carved, &told.plan) else { return };
     flow.part("As carved");
-    let carved = match analyse(told.rig) {
+    let carved = match found {
         Ok(carved) => carved,
         Err(why) => return flow.text(&format!("Nothing yet: {why}.")),
     };
@@ -40,17 +37,22 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
         differences(flow, blade, &length);
     }
     flow.text("Angles to the chord line. A star marks what was not read there but taken from between the readings, from beyond them, or as drawn.");
-    let chart = off(&carved, length);
+    let chart = off(carved, length);
     if chart.shows() {
         flow.charts(&[chart]);
     }
-    let plan = plan(told.rig, told.usual);
-    does(flow, &carved, plan.as_ref().ok(), told.scales);
-    balance(flow, &carved, told.scales);
+    does(flow, carved, plan.as_ref().ok(), told.scales);
+    balance(flow, carved, told.scales);
     let after = plan.as_ref().ok().and_then(|plan| plan.after.strength.as_ref());
     flow.list(&strength(carved.strength.as_ref(), after));
     match plan {
-        Ok(plan) => planned(flow, &plan, &length),
+        Ok(plan) => {
+            if plan.after.balance.read {
+                flow.text(&format!("After the cuts: {}.", plan.after.balance.says()));
+            }
+            planned(flow, plan, &length);
+            flow.list(&plan.warns(carved));
+        }
         Err(why) => flow.text(&format!("No plan of what to take off: {why}.")),
     }
 }

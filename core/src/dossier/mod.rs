@@ -19,8 +19,8 @@ mod verdict;
 pub use scale::{Scale, Scales};
 
 use crate::bench::{Paper, Sheet, bind};
-use crate::carved::usual_point;
-use crate::result::{Envelope, PointResult};
+use crate::carved::{self as carved_blades, CarvedError, usual_point};
+use crate::result::{Carved, Envelope, PointResult, RemovalPlan};
 use crate::rig::{FIT_RADIUS_FRACTIONS, Rig};
 use crate::{fit, wood};
 use flow::Flow;
@@ -34,23 +34,26 @@ struct Told<'r> {
     scales: &'r Scales,
     /// Every flight point worked out.
     points: Vec<PointResult>,
-    /// The flight point whose air the speed range has.
+    /// The flight point whose air the speed range has, and for which wood is taken off.
     usual: usize,
+    carved: Option<Result<Carved, CarvedError>>,
+    plan: Option<Result<RemovalPlan, CarvedError>>,
     envelope: Option<Envelope>,
     strength: Option<crate::result::Strength>,
 }
 
-/// The pages of a job's dossier, with the units its figures are written in.
+/// The pages of a job's dossier, with the units its figures are written in. `point` is the flight point whose air the speed range has and for which wood is
+/// taken off; without it the usual one.
 ///
 /// ```
 /// use spokeshave::{bench::Paper, dossier::{Scales, dossier}, job::{DEMOS, Job}, rig::Rig};
 /// let rig = Rig::new(&Job::from_json(DEMOS[0].json).unwrap()).unwrap();
-/// let pages = dossier(&rig, &Scales::METRIC, Paper::A4);
+/// let pages = dossier(&rig, &Scales::METRIC, Paper::A4, None);
 /// assert!(pages.len() > 4 && pages[0].name == "Verdict");
 /// ```
 #[must_use]
-pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper) -> Vec<Sheet> {
-    let usual = usual_point(rig);
+pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper, point: Option<usize>) -> Vec<Sheet> {
+    let usual = point.unwrap_or_else(|| usual_point(rig));
     let told = Told {
         rig,
         scales,
@@ -62,6 +65,8 @@ pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper) -> Vec<Sheet> {
             .get(usual)
             .and_then(|point| fit::envelope(rig, point, SPEEDS, &FIT_RADIUS_FRACTIONS)),
         strength: wood::strength(rig).ok(),
+        carved: rig.job.carved.as_ref().map(|_| carved_blades::analyse(rig)),
+        plan: rig.job.carved.as_ref().map(|_| carved_blades::plan(rig, usual)),
     };
     let mut flow = Flow::new(paper, "Verdict");
     verdict::write(&mut flow, &told);

@@ -1,7 +1,7 @@
 //! What decides, first.
 
 use crate::bench::sheet::table::{figures, words};
-use crate::result::{Brief, Envelope, PointResult, State, StationResult};
+use crate::result::{Brief, CarvedStrength, Envelope, PointResult, State, StationResult};
 use crate::rig::Rig;
 use crate::shape::briefs;
 
@@ -22,6 +22,18 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     let mut said: Vec<String> = told.points.iter().map(departure).collect();
     said.extend(told.strength.iter().map(|s| s.verdict.sentence.clone()));
     said.extend(told.envelope.iter().flat_map(|e| range(e, told)));
+    flow.list(&said);
+    as_carved(flow, told);
+}
+
+/// The blades as measured beside the drawn ones.
+fn as_carved(flow: &mut Flow, told: &Told) {
+    let Some(Ok(carved)) = &told.carved else { return };
+    flow.heading("As carved");
+    let rows = carved.flight_points.iter().flat_map(|p| [p.drawn.clone(), p.carved.clone()]);
+    points(flow, &rows.collect::<Vec<_>>(), told.scales, Some(&["drawn", "carved"]));
+    let mut said = vec![format!("Static balance: {}.", carved.balance.says())];
+    said.extend(carved.strength.as_ref().map(CarvedStrength::says));
     flow.list(&said);
 }
 

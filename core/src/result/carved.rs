@@ -204,6 +204,44 @@ impl StaticBalance {
 /// What is nothing to a balance, g.
 const LEAST_GRAMS: f64 = 0.005;
 
+/// Where wood that is taken off for balance is thought to lie, as a share of the tip radius.
+const BALANCE_AT: f64 = 0.75;
+/// What is nothing to a blade's margin.
+const LEAST_MARGIN: f64 = 0.01;
+
+impl RemovalPlan {
+    /// What the cuts do to balance and strength, and what to do about it, a sentence each.
+    #[must_use]
+    pub fn warns(&self, before: &Carved) -> Vec<String> {
+        let mut all = Vec::new();
+        let (was, is) = (&before.balance, &self.after.balance);
+        if let (true, Some(heavy)) = (is.read && is.grams_at_tip >= LEAST_GRAMS, is.heavy_blade) {
+            let worse = if is.grams_at_tip > was.grams_at_tip {
+                format!(
+                    "The cuts make the balance worse, from {:.2} to {:.2} g at the tip. ",
+                    was.grams_at_tip, is.grams_at_tip
+                )
+            } else {
+                String::new()
+            };
+            all.push(format!(
+                "{worse}Then take about {:.1} g more off the back of blade {heavy} round three quarters of the radius, evenly and a little at a time, and hang it up again.",
+                is.grams_at_tip / BALANCE_AT
+            ));
+        }
+        if let (Some(was), Some(is)) = (&before.strength, &self.after.strength)
+            && is.margin < was.margin - LEAST_MARGIN
+        {
+            all.push(format!(
+                "The cuts take strength: the least margin falls from {:.0} to {:.0} %.",
+                100.0 * was.margin,
+                100.0 * is.margin
+            ));
+        }
+        all
+    }
+}
+
 impl CarvedStrength {
     /// Whether it holds, in a sentence.
     #[must_use]

@@ -2,7 +2,7 @@
 
 use serde::Serialize;
 
-use super::{Compared, State};
+use super::{Compared, RemovalPlan, State};
 use crate::job::{Factors, Widths};
 
 /// What the readings tell.
@@ -119,6 +119,11 @@ pub struct Change {
     pub state: State,
     /// Whether it is done by taking wood off the carved blade.
     pub by_removal: bool,
+    /// How far the blade then has turned, degrees: at three quarters of the radius, or at the tip where only the outer half turns; less than `amount` where
+    /// wood sets a bound.
+    pub had_deg: Option<f64>,
+    /// What to take off carved blades, and what comes of it.
+    pub plan: Option<RemovalPlan>,
     /// Diameter after the change, m.
     pub diameter_m: f64,
     /// Geometric pitch at 0.75 R after the change, m.
@@ -127,7 +132,45 @@ pub struct Change {
     pub flight_points: Vec<Compared>,
 }
 
+/// What is nothing of a change: degrees, or metres of diameter.
+const NOTHING: f64 = 1e-6;
+
 impl Change {
+    /// The change in a sentence, a length said by `length`.
+    #[must_use]
+    pub fn says(&self, length: &dyn Fn(f64) -> String) -> String {
+        let name = match self.means {
+            Means::Pitch => "Turning the whole blade",
+            Means::Twist => "Turning the outer half",
+            Means::Diameter if self.by_removal => "Trimming the tips",
+            Means::Diameter => "Another diameter",
+        };
+        if !self.reached && self.amount.abs() < NOTHING {
+            return format!("{name} brings it no nearer.");
+        }
+        let degrees = |d: f64| format!("{d:+.2}°").replace('-', "\u{2212}");
+        let amount = match self.means {
+            Means::Diameter => length(self.amount),
+            Means::Pitch | Means::Twist => degrees(self.had_deg.unwrap_or(self.amount)),
+        };
+        let planing = if self.plan.is_some() { ", by planing the face" } else { "" };
+        match self.means {
+            Means::Pitch => {
+                format!("The whole blade turned, by {amount} at three quarters of the radius{planing}.")
+            }
+            Means::Twist => format!(
+                "The outer half turned, from nothing at half the radius to {amount} at the tip{planing}."
+            ),
+            Means::Diameter => format!("{name}: {amount} of diameter."),
+        }
+    }
+
+    /// Whether there is nothing to be had of it.
+    #[must_use]
+    pub fn is_in_vain(&self) -> bool {
+        !self.reached && self.amount.abs() < NOTHING
+    }
+
     /// A sentence on the flight points at which the change would pass the limit rpm where nothing did before.
     #[must_use]
     pub fn says_limit(&self) -> Option<String> {

@@ -40,6 +40,8 @@ fn packages() -> Result<()> {
     let wanted = [
         ("chromium", chromium().is_some()),
         ("chromium-driver", chromedriver().is_some()),
+        ("firefox-esr", on_path(&["firefox-esr", "firefox"]).is_some()),
+        ("webkit2gtk-driver", on_path(&["WebKitWebDriver"]).is_some()),
         ("xvfb", xvfb().is_some()),
         ("xdotool", xdotool().is_some()),
         ("npm", on_path(&["npm"]).is_some()),
@@ -53,7 +55,7 @@ fn packages() -> Result<()> {
     anyhow::ensure!(
         may_install(),
         "missing: {}. On Debian run `{line}` as root. Elsewhere install Chromium or Chrome, the \
-         chromedriver of the same version, Xvfb, xdotool, npm and Python 3.11 or later with its venv module, all on \
+         chromedriver of the same version, Firefox, WebKitGTK with its WebKitWebDriver, Xvfb, xdotool, npm and Python 3.11 or later with its venv module, all on \
          the PATH",
         missing.join(", ")
     );

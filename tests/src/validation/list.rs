@@ -33,6 +33,7 @@ them. Their figures are printed by the tests and not kept here.
 | `validate_stations_and_fits_scipy` | SciPy | stations of the examples from the momentum equations and the section's coefficients: inflow angle within 0.001°; full throttle and level flight from engine, battery and drag polar: rpm within 1e-6 |
 | `validate_atmosphere_ambiance` | `ambiance` | pressure, density, temperature, speed of sound, viscosity from 0 to 20 km within 2e-5 |
 | `validate_drawn_sections_sectionproperties` | `sectionproperties` | every family drawn at 9, 17 or 32 % thick: area within 0.1 %, second moments 0.2 and 0.5 %, torsion constant 0.5 % |
+| `validate_page_firefox`, `validate_page_webkit` | Firefox, WebKitGTK | a whole task on the page from disk: departures as the core has them after typing, undo and reload; no request; no accessibility rule broken; no wider than a narrow screen |
 | `validate_solid_trimesh` | `trimesh`, `shapely` | STL watertight, triangles turned alike, handed as asked, as many holes as asked; volume within 0.5 % of the sections less the drilling |
 | `validate_drawings_ezdxf_shapely` | `ezdxf`, `shapely` | DXF sound, in millimetres; two cards back to back leave the section within 0.2 % of its area and 0.05 mm of its rim |
 | `validate_paper_mupdf` | MuPDF | PDF and SVG of the paper's size within 0.4 mm; a 100 mm bar is 100 ± 0.1 mm |

@@ -117,7 +117,7 @@ fn validate_report_mupdf() {
         for (paper, scales) in [(Paper::A4, Scales::METRIC), (Paper::Letter, Scales::INCHES)] {
             let folder = tempfile::tempdir().unwrap();
             let file = folder.path().join("report.pdf");
-            std::fs::write(&file, pdf(&rig.job.title, &dossier(&rig, &scales, paper))).unwrap();
+            std::fs::write(&file, pdf(&rig.job.title, &dossier(&rig, &scales, paper, None))).unwrap();
             let [w, h] = paper.size_mm().map(|mm| mm.to_string());
             judge("report.py", &[&[text(&file), w.as_str(), h.as_str()], &parts[..]].concat());
         }

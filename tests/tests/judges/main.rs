@@ -2,4 +2,5 @@
 //! `judges/requirements.txt` lists.
 
 mod bench;
+mod engines;
 mod solves;

@@ -1,4 +1,4 @@
-//! Stations and fits before SciPy, the atmosphere before ambiance, sections before sectionproperties.
+//! Stations and fits before `SciPy`, the atmosphere before ambiance, sections before sectionproperties.
 
 use serde_json::{Value, json};
 use spokeshave::air::Air;

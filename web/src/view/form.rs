@@ -87,17 +87,19 @@ pub fn Entry(props: &EntryProps) -> Html {
     let wrong = shown.message.is_some();
     let oninput = act.on(move |e: InputEvent| Action::Type(field, text_of(&e)));
     let onchange = act.on(move |_: Event| Action::Commit(field));
-    let onkeydown = Callback::from(move |e: KeyboardEvent| {
-        if e.key() == "Escape" {
-            act.send(Action::GiveUp(field));
-        }
+    // Not every browser tells of a change when the text is again what it was before an undo.
+    let onblur = act.on(move |_: FocusEvent| Action::Commit(field));
+    let onkeydown = Callback::from(move |e: KeyboardEvent| match e.key().as_str() {
+        "Escape" => act.send(Action::GiveUp(field)),
+        "Enter" => act.send(Action::Commit(field)),
+        _ => {}
     });
     let mode = if props.is_text { "text" } else { "decimal" };
     html! {
         <input type="text" inputmode={mode} enterkeyhint={props.enter} class={classes!("entry", wrong.then_some("wrong"), props.class.clone())}
             value={shown.text.clone()} placeholder={props.hint.clone()} aria-label={shown.name.clone()} autocomplete="off" spellcheck="false"
             aria-invalid={wrong.then_some("true")} aria-describedby={wrong.then(|| shown.message_id())}
-            {oninput} {onchange} {onkeydown} />
+            {oninput} {onchange} {onblur} {onkeydown} />
     }
 }
 

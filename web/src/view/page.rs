@@ -148,7 +148,7 @@ fn Panels(props: &PageProps) -> Html {
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
             <Panel id="report" number={14} title="Report" open=false result="the whole job as pages to print or to save as PDF">
-                <ReportPanel rig={later.rig.clone()} units={state.units} />
+                <ReportPanel rig={later.rig.clone()} units={state.units} point={state.point} />
             </Panel>
         </>
     }

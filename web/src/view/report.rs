@@ -23,10 +23,12 @@ pub struct ReportPanelProps {
     pub rig: Option<RigRef>,
     /// The units picked.
     pub units: Units,
+    /// The flight point selected.
+    pub point: usize,
 }
 
 /// What pages were made of.
-type Key = (RigRef, Units, Paper);
+type Key = (RigRef, Units, Paper, Option<usize>);
 
 /// A button that makes the pages, then the pages.
 #[component]
@@ -36,7 +38,8 @@ pub fn ReportPanel(props: &ReportPanelProps) -> Html {
     let asked = use_mut_ref(|| None::<Timeout>);
     let working = use_state_eq(|| false);
     let Some(rig) = &props.rig else { return html! {} };
-    let key: Key = (rig.clone(), props.units, *paper);
+    let key: Key =
+        (rig.clone(), props.units, *paper, Some(props.point).filter(|i| rig.0.condition(*i).is_some()));
     let shown = made.as_ref().filter(|m| m.0 == key).map(|m| m.1.clone());
     let make = {
         let (key, made, working) = (key, made.setter(), working.setter());
@@ -45,7 +48,7 @@ pub fn ReportPanel(props: &ReportPanelProps) -> Html {
             working.set(true);
             // A moment later, so that the button says what it does first.
             *asked.borrow_mut() = Some(Timeout::new(40, move || {
-                let pages = Rc::new(dossier(&key.0.0, &scales(key.1), key.2));
+                let pages = Rc::new(dossier(&key.0.0, &scales(key.1), key.2, key.3));
                 made.set(Some((key, pages)));
                 done.set(false);
             }));

@@ -2,6 +2,8 @@
 
 mod print;
 
+pub(crate) use print::take_off;
+
 use std::path::PathBuf;
 
 use serde::Serialize;
@@ -64,7 +66,7 @@ pub(crate) fn run(args: &Args) -> Outcome {
     let found = carved::analyse(&rig).map_err(Stop::bad)?;
     let plan = match carved::plan(&rig, point) {
         Ok(plan) => Some(plan),
-        Err(e @ CarvedError::NoAnswer(_)) => {
+        Err(e @ (CarvedError::NoAnswer(_) | CarvedError::Unread(_))) => {
             eprintln!("spokeshave: no plan: {e}");
             None
         }

@@ -7,7 +7,7 @@ use spokeshave::cautions;
 use spokeshave::dossier::{Scales, dossier};
 
 use crate::bench::{PaperName, UnitName};
-use crate::input::{JobSource, Outcome, Stop, print};
+use crate::input::{JobSource, Outcome, Stop, point_index, print};
 
 #[derive(clap::Args)]
 #[command(
@@ -24,6 +24,9 @@ pub(crate) struct Args {
     /// Where the pages go, one PDF; a file of this name is replaced
     #[arg(long, value_name = "FILE")]
     pdf: PathBuf,
+    /// Flight point whose air the speed range has and for which wood is taken off; the first in flight without it
+    #[arg(long, value_name = "NAME")]
+    point: Option<String>,
     /// Size of the paper
     #[arg(long, default_value = "a4")]
     paper: PaperName,
@@ -34,11 +37,12 @@ pub(crate) struct Args {
 
 pub(crate) fn run(args: &Args) -> Outcome {
     let rig = args.source.rig()?;
+    let point = args.point.as_deref().map(|name| point_index(&rig, Some(name))).transpose()?;
     let scales = match args.units {
         UnitName::Mm => Scales::METRIC,
         UnitName::Inch => Scales::INCHES,
     };
-    let pages = dossier(&rig, &scales, args.paper.into());
+    let pages = dossier(&rig, &scales, args.paper.into(), point);
     let fail = |e: std::io::Error| Stop::BadInput(format!("{}: {e}", args.pdf.display()));
     std::fs::write(&args.pdf, pdf(&rig.job.title, &pages)).map_err(fail)?;
     print(&format!(

@@ -21,6 +21,7 @@ use entry::BladeEntry;
 use found::{Balance, Differences, Holds, Points};
 use sheet::ReadingsSheet;
 use take_off::TakeOffSheet;
+pub use take_off::table as take_off;
 
 /// Properties of [`CarvedPanel`].
 #[derive(Properties, PartialEq)]

@@ -1,6 +1,6 @@
 //! The sheet for the bench: what to take off, where.
 
-use spokeshave::result::{PlannedBlade, PlannedStation, RemovalPlan};
+use spokeshave::result::{PlannedBlade, PlannedStation};
 use yew::prelude::*;
 
 use super::found::{FoundProps, fine};
@@ -20,18 +20,18 @@ pub(super) fn TakeOffSheet(props: &FoundProps) -> Html {
                        nothing at the other edge; off the back at the thickest place, fading to the edges; then off the trailing edge. Wood \
                        only comes off: what stays wrong is in the last column, and nothing is cut where nothing was read. Cut less than it says, and measure again." }
                 </p>
-                <div class="duo">{ for plan.blades.iter().map(|b| table(plan, b, props.units)) }</div>
+                { for plan.warns(&props.found.carved).into_iter().map(|warns| html! { <p class="warning">{ warns }</p> }) }
+                <div class="duo">{ for plan.blades.iter().map(|b| table(b, props.units)) }</div>
             </>
         },
     }
 }
 
-fn table(plan: &RemovalPlan, blade: &PlannedBlade, units: Units) -> Html {
+/// What to take off one blade.
+pub fn table(blade: &PlannedBlade, units: Units) -> Html {
     let name = format!("Blade {}: take off", blade.blade);
     let mm = units.symbol(Quantity::Length);
-    let after = plan.after.blades.iter().find(|b| b.blade == blade.blade);
-    let left = |i: usize| after.and_then(|b| b.stations.get(i)).map(|s| s.angle_deg.from_drawn);
-    let rows = blade.stations.iter().enumerate().map(|(i, s)| row(s, left(i), units));
+    let rows = blade.stations.iter().map(|s| row(s, units));
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label={name.clone()}>
             <table class="sheet-table take-off">
@@ -45,7 +45,7 @@ fn table(plan: &RemovalPlan, blade: &PlannedBlade, units: Units) -> Html {
                     <th scope="col">{ "Then face" }<small>{ "deg" }</small></th>
                     <th scope="col">{ "Then chord" }<small>{ mm }</small></th>
                     <th scope="col">{ "Then thick" }<small>{ mm }</small></th>
-                    <th scope="col">{ "Left from drawn" }<small>{ "deg" }</small></th>
+                    <th scope="col">{ "Left off by" }<small>{ "deg" }</small></th>
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
             </table>
@@ -68,7 +68,7 @@ fn notes(blade: &PlannedBlade, units: Units) -> String {
     all.iter().map(told).collect::<Vec<_>>().join(" ")
 }
 
-fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
+fn row(s: &PlannedStation, units: Units) -> Html {
     let decimals = units.decimals(Quantity::Length) + 1;
     let depth = |v: f64| {
         let text = if v > 0.0 { fixed(units.shown(Quantity::Length, v), decimals) } else { "·".into() };
@@ -81,7 +81,7 @@ fn row(s: &PlannedStation, left_deg: Option<f64>, units: Units) -> Html {
             <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
             <td>{ fine(units, s.chord_m) }</td>
             <td>{ fine(units, s.thickness_m) }</td>
-            <td title={s.note()}>{ if s.note().is_empty() { left_deg.map_or_else(String::new, |d| signed(d, 2)) } else { NO_FIGURE.into() } }</td>
+            <td title={s.note()}>{ if s.note().is_empty() { signed(s.angle_deg - s.wanted_deg, 2) } else { NO_FIGURE.into() } }</td>
         </tr>
     }
 }

@@ -1,9 +1,10 @@
 //! What to change for a wanted rpm or speed.
 
+use spokeshave::carved::analyse;
 use spokeshave::change::{Wanted, changes};
 use std::rc::Rc;
 
-use spokeshave::result::{Change, Figure, Logged, Means};
+use spokeshave::result::{Carved, Change, Figure, Logged};
 use spokeshave::rig::Rig;
 use yew::prelude::*;
 
@@ -12,6 +13,7 @@ use crate::app::RigRef;
 use crate::number::{read, signed, with_unit};
 use crate::units::{Quantity, Units};
 use crate::view::Seen;
+use crate::view::carved::take_off;
 use crate::view::form::Pick;
 use crate::view::sections::boxes::Line;
 
@@ -69,6 +71,8 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
     let names =
         props.state.job().flight_points.iter().map(|p| AttrValue::from(p.name.clone())).collect::<Vec<_>>();
     let quantity = quantity(now.speed);
+    let asked_of_wood = matches!(&now.answer, Some(Ok(changes)) if changes.iter().any(|c| c.plan.is_some()));
+    let before = props.rig.as_ref().filter(|_| asked_of_wood).and_then(|rig| analyse(&rig.0).ok());
     html! {
         <div class="change">
             <h3>{ "What to change" }</h3>
@@ -83,7 +87,7 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
                 if props.logged.as_deref().is_some_and(Result::is_ok) {
                     <p class="note">{ "Worked out with the factors that the readings tell, kept or not." }</p>
                 }
-                { for changes.iter().map(|c| told(c, now.speed, props.state.units)) }
+                { for changes.iter().map(|c| told(c, before.as_ref(), now.speed, props.state.units)) }
             }
         </div>
     }
@@ -108,25 +112,19 @@ fn answered(
     changes(known.as_ref().unwrap_or(&rig.0), &wanted).map_err(|e| e.to_string())
 }
 
-fn told(c: &Change, speed: bool, units: Units) -> Html {
-    let amount = match c.means {
-        Means::Pitch => format!("The whole blade turned by {}°", signed(c.amount, 2)),
-        Means::Twist => format!(
-            "The outer half turned, from nothing at half the radius to {}° at the tip",
-            signed(c.amount, 2)
-        ),
-        Means::Diameter => format!(
-            "{} {}\u{a0}{} of diameter",
-            if c.by_removal { "Tips trimmed:" } else { "Another diameter:" },
-            signed(units.shown(Quantity::Length, c.amount), 0),
+fn told(c: &Change, before: Option<&Carved>, speed: bool, units: Units) -> Html {
+    let length = |m: f64| {
+        let decimals = units.decimals(Quantity::Length);
+        format!(
+            "{}\u{a0}{}",
+            signed(units.shown(Quantity::Length, m), decimals),
             units.symbol(Quantity::Length)
-        ),
+        )
     };
-    let how = if c.by_removal && c.means != Means::Diameter {
-        ", by planing the face as far as each station allows"
-    } else {
-        ""
-    };
+    let amount = c.says(&length);
+    if c.is_in_vain() {
+        return html! { <p class="note">{ amount }</p> };
+    }
     let reached = match (c.reached, c.had) {
         (true, _) => String::new(),
         (false, Some(had)) => {
@@ -135,7 +133,7 @@ fn told(c: &Change, speed: bool, units: Units) -> Html {
         (false, None) => format!(" Not reached. {}", c.state.sentence()),
     };
     let then = format!(
-        "{amount}{how}.{reached} Then {} across, pitch {} at three quarters of the radius. {}",
+        "{amount}{reached} Then {} across, pitch {} at three quarters of the radius. {}",
         with_unit(units, Quantity::Length, Some(c.diameter_m)),
         with_unit(units, Quantity::Length, Some(c.pitch_m)),
         c.says_limit().unwrap_or_default()
@@ -144,6 +142,10 @@ fn told(c: &Change, speed: bool, units: Units) -> Html {
     html! {
         <details open={c.reached}>
             <summary>{ then }</summary>
+            if let (Some(plan), Some(before)) = (&c.plan, before) {
+                { for plan.warns(before).into_iter().map(|warns| html! { <p class="warning">{ warns }</p> }) }
+                <div class="duo">{ for plan.blades.iter().map(|b| take_off(b, units)) }</div>
+            }
             { points("Every flight point now and changed", ["now", "changed"], pairs, units) }
         </details>
     }

@@ -81,6 +81,7 @@ pub(super) fn text(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
     parts.extend(carved.strength.as_ref().map(CarvedStrength::says));
     let after = plan.and_then(|plan| plan.after.strength.as_ref());
     parts.extend(after.map(|s| format!("After the plan: {}", s.says())));
+    parts.extend(plan.map(|plan| plan.warns(carved).join("\n")).filter(|warns| !warns.is_empty()));
     parts.extend(plan.map(sheet));
     parts.join("\n\n")
 }
@@ -162,6 +163,15 @@ fn balance(carved: &Carved, plan: Option<&RemovalPlan>) -> String {
 }
 
 fn sheet(plan: &RemovalPlan) -> String {
+    format!(
+        "What can be put right, departure as drawn at {} (reach and off by: to the chord line)\n{}",
+        plan.flight_point,
+        take_off(plan)
+    )
+}
+
+/// What to take off, by blade and radius.
+pub(crate) fn take_off(plan: &RemovalPlan) -> String {
     let header = [
         "take off, mm",
         "face at LE",
@@ -193,9 +203,5 @@ fn sheet(plan: &RemovalPlan) -> String {
     };
     let rows =
         plan.blades.iter().flat_map(|b| b.stations.iter().map(|s| row(b.blade, s)).collect::<Vec<_>>());
-    format!(
-        "What can be put right, departure as drawn at {} (reach and off by: to the chord line)\n{}",
-        plan.flight_point,
-        table(&header, rows.collect())
-    )
+    table(&header, rows.collect())
 }

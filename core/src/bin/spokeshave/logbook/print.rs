@@ -1,7 +1,7 @@
 //! Tables of the logbook and of what to change.
 
 use spokeshave::change::Wanted;
-use spokeshave::result::{Change, FactorFound, Figure, LogLine, Logged, Means};
+use spokeshave::result::{Change, FactorFound, Figure, LogLine, Logged};
 use spokeshave::rig::Rig;
 
 use crate::briefs::briefs;
@@ -91,29 +91,33 @@ pub(super) fn changes(rig: &Rig, wanted: &Wanted, changes: &[Change]) -> String 
         _ => format!("{} rpm", figure(Some(v), 0)),
     };
     let wood = changes.iter().any(|c| c.by_removal);
+    let before = spokeshave::carved::analyse(rig).ok();
+    let before = before.as_ref();
     let how = if wood { ", by taking wood off the carved blade" } else { "" };
     let mut parts = vec![format!("Wanted at {name}: {}{how}", value(wanted.value))];
     for c in changes {
-        let amount = match c.means {
-            Means::Pitch => format!("{}° over the whole blade", signed(Some(c.amount), 2)),
-            Means::Twist => {
-                format!("{}° at the tip, nothing up to half the radius", signed(Some(c.amount), 2))
-            }
-            Means::Diameter => format!("{} mm of diameter", signed(Some(1e3 * c.amount), 0)),
-        };
+        let amount = c.says(&|m| format!("{} mm", signed(Some(1e3 * m), 0)));
+        if c.is_in_vain() {
+            parts.push(amount);
+            continue;
+        }
         let reached = match (c.reached, c.had) {
             (true, _) => String::new(),
-            (false, Some(had)) => format!("; not reached: {} is the nearest", value(had)),
-            (false, None) => format!("; not reached: {}", c.state.sentence()),
+            (false, Some(had)) => format!(" Not reached: {} is the nearest.", value(had)),
+            (false, None) => format!(" Not reached: {}", c.state.sentence()),
         };
         let rows = c.flight_points.iter().flat_map(|p| [(&p.drawn, "now"), (&p.shaped, "changed")]);
         parts.push(format!(
-            "{amount}{reached}; then {} mm across, pitch {} mm{}\n{}",
+            "{amount}{reached} Then {} mm across, pitch {} mm.{}\n{}",
             figure(Some(1e3 * c.diameter_m), 0),
             figure(Some(1e3 * c.pitch_m), 0),
-            c.says_limit().map_or_else(String::new, |says| format!(". {says}")),
+            c.says_limit().map_or_else(String::new, |says| format!(" {says}")),
             briefs(rows)
         ));
+        if let (Some(plan), Some(before)) = (&c.plan, before) {
+            parts.push(crate::carved::take_off(plan));
+            parts.extend(Some(plan.warns(before).join("\n")).filter(|warns| !warns.is_empty()));
+        }
     }
     parts.join("\n\n")
 }
