@@ -26,9 +26,10 @@ pub fn plain(value: f64, decimals: usize) -> String {
 pub fn figure(units: Units, quantity: Quantity, si: Option<f64>) -> String {
     let Some(shown) = si.map(|si| units.shown(quantity, si)) else { return NO_FIGURE.into() };
     match quantity {
-        // From grams to tonnes, and figures as they are given: no more decimals than they have.
+        // From grams to tonnes, and figures as they are given: no more decimals than they have, small masses in three figures.
         Quantity::Mass | Quantity::Area | Quantity::Charge => {
-            let text = fixed(shown, 2);
+            let small = quantity == Quantity::Mass && shown.abs() < 1.0 && shown != 0.0;
+            let text = if small { significant(shown, 3) } else { fixed(shown, 2) };
             text.trim_end_matches('0').trim_end_matches('.').into()
         }
         // From a palm-size rotor to a light aeroplane: five orders of size.
@@ -118,6 +119,13 @@ mod tests {
         assert_eq!(plain(-1234.5, 1), "−1234.5");
         assert_eq!(plain(-0.04, 1), "0.0");
         assert_eq!(plain(f64::NAN, 1), NO_FIGURE);
+    }
+
+    #[test]
+    fn a_small_mass_keeps_three_figures() {
+        let shown = [0.0, 0.0414, 0.25, 0.00312, 1.234, 620.0]
+            .map(|kg| figure(Units::default(), Quantity::Mass, Some(kg)));
+        assert_eq!(shown, ["0", "0.0414", "0.25", "0.00312", "1.23", "620"]);
     }
 
     #[test]

@@ -264,16 +264,17 @@ pub struct FrequencyLine {
 }
 
 impl FrequencyLine {
-    /// The mode in words.
+    /// The mode in two words, short enough to stand at its line.
     #[must_use]
     pub fn words(&self) -> String {
         let nth = match self.number {
-            1 => "first".into(),
-            2 => "second".into(),
-            3 => "third".into(),
-            n => format!("{n}th"),
+            1 => "st",
+            2 => "nd",
+            3 => "rd",
+            _ => "th",
         };
-        format!("{nth} {}", self.mode.words())
+        let mode = if self.mode == ModeKind::Torsion { "twist" } else { "bending" };
+        format!("{}{nth} {mode}", self.number)
     }
 }
 

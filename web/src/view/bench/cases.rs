@@ -123,7 +123,7 @@ pub(super) fn HubTable(props: &HubTableProps) -> Html {
         ("Holes of the hub in the boss", by, String::new())
     });
     let rows = [
-        ("Bolts on the wood, if friction did nothing", pa(Some(h.bearing_pa)), pa(Some(h.bearing_limit_pa))),
+        ("Bolts on the hub, if friction did nothing", pa(Some(h.bearing_pa)), pa(Some(h.bearing_limit_pa))),
         ("Tension through the boss", pa(h.boss_tension_pa), pa(Some(h.boss_limit_pa))),
         ("Pressure under the plates", pa(h.clamp_pa), pa(Some(h.clamp_limit_pa))),
         ("Torque on a nut", String::new(), torque(Some(h.most_bolt_torque_n_m))),

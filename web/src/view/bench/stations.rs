@@ -23,16 +23,16 @@ pub(super) fn Stations(props: &StationsProps) -> Html {
     let rows = props.stations.iter().map(|s| row(units, s, s.station == Some(props.selected + 1)));
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="Stress by station">
-            <table class="sheet-table">
+            <table class="sheet-table stress-table">
                 <caption>{ "Stress and margin, each under the case that is worst there" }</caption>
                 <thead><tr>
                     <th scope="col">{ "Station" }</th>
+                    <th scope="col">{ "Margin" }<small>{ "%" }</small></th>
                     <th scope="col">{ "Radius" }<small>{ length }</small></th>
                     <th scope="col">{ "Thickness" }<small>{ length }</small></th>
                     <th scope="col">{ "Tension" }<small>{ stress }</small></th>
                     <th scope="col">{ "Compression" }<small>{ stress }</small></th>
                     <th scope="col">{ "Shear" }<small>{ stress }</small></th>
-                    <th scope="col">{ "Margin" }<small>{ "%" }</small></th>
                     <th scope="col">{ "Missing" }<small>{ length }</small></th>
                     <th scope="col" class="state">{ "Decided by" }</th>
                 </tr></thead>
@@ -51,12 +51,12 @@ fn row(units: Units, s: &StressStation, selected: bool) -> Html {
     html! {
         <tr class={classes!(selected.then_some("selected"), over.then_some("over"))}>
             <th scope="row">{ name }</th>
+            <td>{ signed_or_none(s.margin.map(|m| 100.0 * m), 0) }</td>
             <td>{ figure(units, Quantity::Length, Some(s.radius_m)) }</td>
             <td>{ thickness(units, s.thickness_m) }</td>
             <td>{ pa(s.tension_pa) }</td>
             <td>{ pa(s.compression_pa) }</td>
             <td>{ pa(s.shear_pa) }</td>
-            <td>{ signed_or_none(s.margin.map(|m| 100.0 * m), 0) }</td>
             <td>{ missing }</td>
             <td class="state">{ by }</td>
         </tr>
