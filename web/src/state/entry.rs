@@ -6,7 +6,7 @@ use spokeshave::carved::{angle_of, minutes_fault};
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{Job, Problem};
 
-use super::{EngineFigure, Field, Measure};
+use super::{EngineFigure, Field, LogFigure, Measure};
 use crate::number;
 use crate::units::{Quantity, Units};
 
@@ -65,7 +65,9 @@ pub fn tried(
     {
         return Err(sentence(&why));
     }
-    let typed = minutes.map_or_else(|| number::read(units, quantity, text), Ok);
+    let full =
+        matches!(field, Field::Log(_, LogFigure::Throttle)) && text.trim().eq_ignore_ascii_case("full");
+    let typed = full.then_some(1.0).or(minutes).map_or_else(|| number::read(units, quantity, text), Ok);
     let value = typed.map_err(|why| {
         let example = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));
         example.map_or_else(|| sentence(&why), |e| format!("{} It was {e}.", sentence(&why)))

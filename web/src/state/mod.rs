@@ -43,7 +43,7 @@ pub use measure::Measure;
 pub use notice::Notice;
 pub use opened::{Opened, Part};
 pub use point_figure::PointFigure;
-pub use readings::{BladeFigure, CarvedChoice, LogFigure, LogbookChoice};
+pub use readings::{BladeFigure, CarvedChoice, LogFigure, LogbookChoice, between_stations};
 pub use variant::{Beside, Variant, Variants};
 pub use wishes::{LimitFigure, RpmBound};
 

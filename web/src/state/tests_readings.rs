@@ -48,6 +48,29 @@ fn a_doubted_reading_is_confirmed_until_it_is_typed_anew() {
 }
 
 #[test]
+fn a_reading_between_the_stations_is_told_and_can_be_taken_out() {
+    let start = State::new(Job::from_json(DEMOS[0].json).unwrap());
+    let read = typed(&start, Field::Reading(0, 7, BladeFigure::Chord), "76");
+    let mut carved = read.job().carved.clone().unwrap();
+    let at_station_m = carved.blades[0].readings[0].radius_m;
+    for off_m in [0.0009, 0.0011] {
+        carved.blades[0].readings[0].radius_m = at_station_m + off_m;
+        let sheet = Choice::Carved(CarvedChoice::Readings(Box::new(carved.clone())));
+        let brought = read.after(Action::Choose(sheet, Running::default()));
+        let between = between_stations(brought.job(), 0);
+        let boxed = Field::Reading(0, 7, BladeFigure::Chord).value(brought.job(), &[]);
+        assert_eq!(between.is_empty(), off_m < 0.001);
+        assert_eq!(between.is_empty(), boxed == Some(0.076));
+        for (i, reading) in between {
+            assert_eq!(BladeFigure::Chord.of(reading), Some(0.076));
+            let out = Choice::Carved(CarvedChoice::Remove(0, i));
+            let out = brought.after(Action::Choose(out, Running::default()));
+            assert!(out.job().carved.as_ref().unwrap().blades[0].readings.is_empty());
+        }
+    }
+}
+
+#[test]
 fn a_reading_of_the_logbook_is_added_typed_and_removed() {
     let choose = |state: &State, choice: LogbookChoice| {
         state.after(Action::Choose(Choice::Logbook(choice), Running::default()))
@@ -59,6 +82,10 @@ fn a_reading_of_the_logbook_is_added_typed_and_removed() {
         typed(&typed(&one, Field::Log(0, LogFigure::Rpm), "2950"), Field::Log(0, LogFigure::Throttle), "100");
     let reading = &read.job().logbook.as_ref().unwrap().readings[0];
     assert_eq!((reading.engine_rpm, reading.throttle), (Some(2950.0), Some(1.0)));
+    for full in ["full", " Full "] {
+        let read = typed(&one, Field::Log(0, LogFigure::Throttle), full);
+        assert_eq!(read.job().logbook.as_ref().unwrap().readings[0].throttle, Some(1.0), "{full}");
+    }
     let level = choose(&read, LogbookChoice::Level(0, true));
     assert!(level.notice.is_some(), "level flight needs an airspeed");
     let gone = choose(&read, LogbookChoice::Remove(0));

@@ -15,6 +15,7 @@ pub mod machine;
 pub mod mark;
 pub mod method;
 pub mod notice;
+mod onward;
 pub mod page;
 pub mod panel;
 pub mod pasted;

@@ -59,19 +59,21 @@ impl BladeFigure {
         }
     }
 
+    /// The figure of a reading, SI.
+    #[must_use]
+    pub fn of(self, mut reading: BladeReading) -> Option<f64> {
+        *self.place(&mut reading)
+    }
+
     /// The figure read, SI.
     pub(in crate::state) fn value(self, job: &Job, blade: usize, station: usize) -> Option<f64> {
-        let radius_m = radius_m(job, station)?;
-        let readings = &job.carved.as_ref()?.blades.get(blade)?.readings;
-        let mut reading = *readings.iter().find(|r| (r.radius_m - radius_m).abs() <= AT_STATION_M)?;
-        *self.place(&mut reading)
+        self.of(*readings(job, blade).get(at_station(job, blade, station)?)?)
     }
 
     /// Where in the file the reading stands, or would stand.
     pub(in crate::state) fn index(job: &Job, blade: usize, station: usize) -> usize {
         let radius = radius_m(job, station).unwrap_or(0.0);
-        let readings = job.carved.as_ref().and_then(|c| c.blades.get(blade)).map(|b| &b.readings);
-        readings.map_or(0, |r| r.partition_point(|r| r.radius_m < radius - AT_STATION_M))
+        readings(job, blade).partition_point(|r| r.radius_m < radius - AT_STATION_M)
     }
 
     /// Writes the figure, SI; whether there is such a station.
@@ -111,6 +113,26 @@ impl BladeFigure {
         }
         true
     }
+}
+
+/// Readings of a blade that no station's boxes show, each with its place in the file.
+#[must_use]
+pub fn between_stations(job: &Job, blade: usize) -> Vec<(usize, BladeReading)> {
+    let boxed: Vec<usize> =
+        (0..job.propeller.stations.len()).filter_map(|s| at_station(job, blade, s)).collect();
+    let all = readings(job, blade).iter().copied().enumerate();
+    all.filter(|(i, _)| !boxed.contains(i)).collect()
+}
+
+/// Place of the reading that is one of a station.
+fn at_station(job: &Job, blade: usize, station: usize) -> Option<usize> {
+    let (radius, at) = (radius_m(job, station)?, BladeFigure::index(job, blade, station));
+    let reading = readings(job, blade).get(at)?;
+    ((reading.radius_m - radius).abs() <= AT_STATION_M).then_some(at)
+}
+
+fn readings(job: &Job, blade: usize) -> &[BladeReading] {
+    job.carved.as_ref().and_then(|c| c.blades.get(blade)).map_or(&[], |b| &b.readings)
 }
 
 /// Readings to begin with: angles on the flat face where every station has one.

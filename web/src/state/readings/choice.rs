@@ -1,6 +1,6 @@
 //! What is picked, added and taken out of the readings.
 
-use spokeshave::job::{AngleReference, Carved, Factors, Job, LogReading, Logbook};
+use spokeshave::job::{AngleReference, BladeReading, Carved, Factors, Job, LogReading, Logbook};
 
 use super::blade::started;
 
@@ -13,6 +13,8 @@ pub enum CarvedChoice {
     Readings(Box<Carved>),
     /// Whether what is hard to believe of a reading counts: blade and reading, from 0.
     Confirm(usize, usize, bool),
+    /// A reading is taken out: blade and reading, from 0.
+    Remove(usize, usize),
     /// All readings are taken out.
     Clear,
 }
@@ -43,6 +45,7 @@ impl CarvedChoice {
             Self::Readings(_) => "readings of a sheet",
             Self::Confirm(.., true) => "a reading is right",
             Self::Confirm(.., false) => "a reading is left out",
+            Self::Remove(..) => "take out a reading",
             Self::Clear => "take out the readings of the blades",
         }
         .into()
@@ -56,14 +59,22 @@ impl CarvedChoice {
             }
             Self::Readings(carved) => job.carved = Some(carved.as_ref().clone()),
             Self::Confirm(blade, reading, on) => {
-                let blade = job.carved.as_mut().and_then(|c| c.blades.get_mut(*blade));
-                if let Some(reading) = blade.and_then(|b| b.readings.get_mut(*reading)) {
+                if let Some(reading) = readings(job, *blade).and_then(|r| r.get_mut(*reading)) {
                     reading.confirmed = *on;
+                }
+            }
+            Self::Remove(blade, reading) => {
+                if let Some(readings) = readings(job, *blade).filter(|r| *reading < r.len()) {
+                    readings.remove(*reading);
                 }
             }
             Self::Clear => job.carved = None,
         }
     }
+}
+
+fn readings(job: &mut Job, blade: usize) -> Option<&mut Vec<BladeReading>> {
+    Some(&mut job.carved.as_mut()?.blades.get_mut(blade)?.readings)
 }
 
 impl LogbookChoice {

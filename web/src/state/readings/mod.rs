@@ -4,6 +4,6 @@ mod blade;
 mod choice;
 mod log;
 
-pub use blade::BladeFigure;
+pub use blade::{BladeFigure, between_stations};
 pub use choice::{CarvedChoice, LogbookChoice};
 pub use log::LogFigure;

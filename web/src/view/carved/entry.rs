@@ -1,16 +1,15 @@
 //! Boxes for one blade: large, in columns, the next one down on Enter.
 
+use spokeshave::job::BladeReading;
 use spokeshave::result::Doubt;
-use wasm_bindgen::JsCast;
-use web_sys::{Element, HtmlInputElement};
 use yew::prelude::*;
 
 use super::choose;
-use crate::number::{figure, with_unit};
-use crate::state::{BladeFigure, CarvedChoice, Field, State};
+use crate::number::{figure, fixed, with_unit};
+use crate::state::{BladeFigure, CarvedChoice, Field, State, between_stations};
 use crate::units::Quantity;
 use crate::view::form::{Entry, Message, Shown};
-use crate::view::{Act, Seen, use_act};
+use crate::view::{Act, Seen, onward, use_act};
 
 /// Properties of [`BladeEntry`].
 #[derive(Properties, PartialEq)]
@@ -35,10 +34,7 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
         |s: &f64| figure(state.units, Quantity::Length, Some(0.5 * state.job().propeller.diameter_m * s));
     let radii =
         state.job().propeller.stations.iter().map(|s| html! { <span>{ radius(&s.radius_fraction) }</span> });
-    let unit = |q| match state.units.symbol(q) {
-        "°" => "deg",
-        other => other,
-    };
+    let unit = |q| unit(state, q);
     let column = |(f, boxes): (&BladeFigure, &Vec<Shown>)| {
         html! {
             <div class="carved-column">
@@ -49,7 +45,7 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
     };
     let wrong = columns.iter().flatten().filter(|s| s.message.is_some());
     html! {
-        <fieldset class="carved-blade" onkeydown={Callback::from(|e: KeyboardEvent| onward(&e))}>
+        <fieldset class="carved-blade" onkeydown={Callback::from(|e: KeyboardEvent| onward::next(&e, ".carved-blades"))}>
             <legend>{ format!("Blade {}", blade + 1) }</legend>
             <div class="carved-columns">
                 <div class="carved-column radii" aria-hidden="true">
@@ -61,9 +57,34 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
             // In a place of their own: beside the boxes a message that comes or goes would make the boxes anew and take the focus away.
             <div class="carved-said">
                 { for wrong.map(|s| html! { <Message shown={s.clone()} named=true /> }) }
+                { for between_stations(state.job(), blade).into_iter().map(|(i, r)| between(&act, state, [blade, i], r)) }
                 { for props.doubts.iter().map(|d| doubted(&act, state, d)) }
             </div>
         </fieldset>
+    }
+}
+
+fn unit(state: &State, of: Quantity) -> &'static str {
+    match state.units.symbol(of) {
+        "°" => "deg",
+        other => other,
+    }
+}
+
+/// A reading that lies between the stations, where no box shows it, and a button to take it out.
+fn between(act: &Act, state: &State, [blade, i]: [usize; 2], r: BladeReading) -> Html {
+    let told = |q, si| {
+        let units = state.units;
+        format!("{}\u{a0}{}", fixed(units.shown(q, si), units.decimals(q) + 1), unit(state, q))
+    };
+    let read = |f: &BladeFigure| Some(format!(", {} {}", f.name(), told(f.quantity(), f.of(r)?)));
+    let place = told(Quantity::Length, r.radius_m);
+    let onclick = choose(act, move |_: MouseEvent| CarvedChoice::Remove(blade, i));
+    html! {
+        <p class="note">
+            { "Between stations: radius " }{ &place }{ for BladeFigure::ALL.iter().filter_map(read) }{ ". " }
+            <button type="button" class="inline" aria-label={format!("Take it out, radius {place}")} {onclick}>{ "Take it out" }</button>
+        </p>
     }
 }
 
@@ -82,23 +103,5 @@ fn doubted(act: &Act, state: &State, d: &Doubt) -> Html {
             <p>{ format!("Hard to believe at {place}: {}. {said}", d.message) }</p>
             <button type="button" class="act" {onclick}>{ label }</button>
         </div>
-    }
-}
-
-/// Enter goes to the next box of the panel; leaving the one before takes what was typed.
-fn onward(e: &KeyboardEvent) {
-    if e.key() != "Enter" {
-        return;
-    }
-    let Some(here) = e.target_dyn_into::<HtmlInputElement>() else { return };
-    let Ok(Some(panel)) = here.closest(".carved-blades") else { return };
-    let Ok(boxes) = panel.query_selector_all("input.entry") else { return };
-    let all: Vec<Element> = (0..boxes.length()).filter_map(|i| boxes.get(i)?.dyn_into().ok()).collect();
-    let next = all.iter().position(|b| *b == **here).and_then(|i| all.get(i + 1));
-    if let Some(next) = next.and_then(|n| n.dyn_ref::<HtmlInputElement>()) {
-        e.prevent_default();
-        // A box on the page can have the focus.
-        let _ = next.focus();
-        next.select();
     }
 }

@@ -1,11 +1,12 @@
 //! The table of readings.
 
+use web_sys::Element;
 use yew::prelude::*;
 
 use super::{choose, is_electric};
 use crate::state::{Field, LogFigure, LogbookChoice};
 use crate::view::form::{Entry, Message, Shown, Switch};
-use crate::view::{Act, Seen, use_act};
+use crate::view::{Act, Seen, onward, use_act};
 
 /// What is asked of a reading: what the engine draws is fuel or current, and the other only where it was read all the same.
 fn columns(state: &Seen) -> Vec<LogFigure> {
@@ -38,6 +39,21 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
     let (act, state) = (use_act(), &props.state);
     let count = state.job().logbook.as_ref().map_or(0, |l| l.readings.len());
     let (electric, columns) = (is_electric(state), columns(state));
+    let table = use_node_ref();
+    // How many rows there are once the one asked for is there.
+    let asked = use_mut_ref(|| 0);
+    {
+        let (table, asked) = (table.clone(), asked.clone());
+        use_effect_with(count, move |count| {
+            if asked.take() == *count {
+                first_of_last(&table);
+            }
+        });
+    }
+    let add = choose(&act, move |_: MouseEvent| {
+        asked.replace(count + 1);
+        LogbookChoice::Add
+    });
     let heading = |f: &LogFigure| {
         let (name, unit) = match f {
             LogFigure::Rpm => (if electric { "Motor rpm" } else { "Engine rpm" }, ""),
@@ -53,11 +69,12 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
     html! {
         <>
             <p class="note">
-                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is 100. Tick level for flight that neither climbs nor sinks. \
+                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is 100 or full. Tick level for flight that neither climbs nor sinks. \
                    Pressure altitude and true airspeed, please; leave empty what was not read." }
             </p>
             if count > 0 {
-                <div class="scroll" tabindex="0" role="region" aria-label="Readings">
+                <div class="scroll" tabindex="0" role="region" aria-label="Readings"
+                    ref={table} onkeydown={Callback::from(|e: KeyboardEvent| onward::next(&e, ".logbook"))}>
                     <table class="sheet-table log-readings">
                         <thead><tr>
                             <th scope="col">{ "Reading" }</th>
@@ -70,9 +87,17 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
                 </div>
             }
             <p class="buttons">
-                <button type="button" class="act" onclick={choose(&act, |_: MouseEvent| LogbookChoice::Add)}>{ "Add a reading" }</button>
+                <button type="button" class="act next" onclick={add}>{ "Add a reading" }</button>
             </p>
         </>
+    }
+}
+
+/// To the first box of the last reading; the row of its messages comes after it.
+fn first_of_last(table: &NodeRef) {
+    let Some(table) = table.cast::<Element>() else { return };
+    if let Ok(Some(first)) = table.query_selector("tr:nth-last-child(2) .entry") {
+        onward::go_to(&first);
     }
 }
 
@@ -88,7 +113,7 @@ fn row(act: &Act, state: &Seen, columns: &[LogFigure], i: usize) -> Html {
         <>
             <tr class={classes!(reading.left_out.then_some("left-out"))}>
                 <th scope="row" title={reading.note.clone()}>{ i + 1 }</th>
-                { for boxes.iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
+                { for boxes.iter().map(|s| html! { <td><Entry shown={s.clone()} enter="next" /></td> }) }
                 <td class="tick">{ switch("level", reading.level, LogbookChoice::Level) }</td>
                 <td class="tick">{ switch("left out", reading.left_out, LogbookChoice::LeaveOut) }</td>
                 <td>
