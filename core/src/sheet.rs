@@ -17,8 +17,8 @@ pub struct Quantity {
     pub name: &'static str,
     /// Names it may have in a heading, in small letters, words joined by underscores.
     pub names: &'static [&'static str],
-    /// Units of a heading, each with its worth and its zero in the first: `value * worth + zero`. One that is empty stands
-    /// for no unit.
+    /// Units of a heading, each with its worth and its zero in the first: `value * worth + zero`. In a heading they may be in
+    /// small or capital letters. One that is empty stands for no unit.
     pub units: &'static [(&'static str, f64, f64)],
     /// What is allowed, in the first unit.
     pub allowed: RangeInclusive<f64>,
@@ -149,9 +149,8 @@ impl<'q> Sheet<'q> {
         if quantity.allowed.contains(&(value * worth + zero)) {
             return Ok(Some(value * worth + zero));
         }
-        let others: Vec<(f64, &str)> =
-            quantity.units.iter().filter(|u| u.2 == 0.0).map(|u| (u.1, u.0)).collect();
-        let hint = likely(value, quantity.allowed.clone(), &others);
+        let fits = |u: &&(&str, f64, f64)| !u.0.is_empty() && quantity.allowed.contains(&(value * u.1 + u.2));
+        let hint = perhaps(quantity.units.iter().find(fits).map(|u| u.0));
         let unit = unit(here.map_or("", |u| u.0));
         Err(self.refused(row, name, &format!("{} to {}{unit}{hint}", told(*low), told(*high))))
     }
@@ -196,7 +195,7 @@ impl<'q> Sheet<'q> {
                 first + 1
             ));
         }
-        let Some(unit) = quantity.units.iter().find(|u| u.0 == unit) else {
+        let Some(unit) = quantity.units.iter().find(|u| u.0.to_lowercase() == unit) else {
             let units: Vec<&str> = quantity.units.iter().map(|u| u.0).filter(|u| !u.is_empty()).collect();
             let heading: String = heading.chars().take(40).collect();
             return fault(format!("{heading:?} needs its unit in the heading, one of {}", units.join(", ")));
@@ -225,8 +224,11 @@ impl<'q> Sheet<'q> {
 /// What a value out of range most likely is: the unit whose worth brings it into what is usual, in words to append.
 #[must_use]
 pub fn likely(value: f64, usual: RangeInclusive<f64>, units: &[(f64, &str)]) -> String {
-    let found = units.iter().find(|(worth, _)| usual.contains(&(value * worth)));
-    found.map_or_else(String::new, |(_, unit)| format!("; perhaps it is in {unit}"))
+    perhaps(units.iter().find(|(worth, _)| usual.contains(&(value * worth))).map(|(_, unit)| *unit))
+}
+
+fn perhaps(unit: Option<&str>) -> String {
+    unit.map_or_else(String::new, |unit| format!("; perhaps it is in {unit}"))
 }
 
 /// What a heading names and its unit, which stands behind it in brackets or after an underscore or a blank.

@@ -320,7 +320,12 @@ fn sheets_are_read_with_units_and_faults_have_line_and_column() {
             "rpm,throttle\n2900,80",
             "line 2, column 2: throttle: \"80\"; allowed is 0 to 1; perhaps it is in %",
         ),
-        ("rpm,pressure_pa\n2900,1013", "allowed is 5000 to 115000 Pa; perhaps it is in hpa"),
+        ("rpm,throttle\n2900,most", "throttle: \"most\"; allowed is 0 to 1, a percentage, or full"),
+        ("rpm,throttle\n2900,180 %", "throttle: \"180 %\"; allowed is 0 to 1, a percentage, or full"),
+        ("rpm,pressure_pa\n2900,1013", "allowed is 5000 to 115000 Pa; perhaps it is in hPa"),
+        ("rpm,pressure_hpa\n2900,29.92", "allowed is 50 to 1150 hPa; perhaps it is in inHg"),
+        ("rpm,temperature_c\n2900,288", "allowed is -90 to 75 °C; perhaps it is in K"),
+        ("rpm,temperature\n2900,15", "\"temperature\" needs its unit in the heading, one of °C, C, °F, F, K"),
         ("rpm,level,airspeed_m_s\n2500,yes,", "above 0 in level flight"),
         ("rpm,level\n2500,maybe", "yes, no or nothing"),
         ("rpm,altitude_m,pressure_hpa\n2500,0,1013", "either an altitude or a pressure"),
@@ -329,6 +334,48 @@ fn sheets_are_read_with_units_and_faults_have_line_and_column() {
         let message = import::read(text, None).unwrap_err().to_string();
         assert!(message.contains(expected), "{message:?} has no {expected:?}");
     }
+}
+
+#[test]
+fn units_of_headings_may_be_in_small_or_capital_letters() {
+    for (heading, cell, celsius) in [
+        ("temperature_c", "15", 15.0),
+        ("Temperature [°C]", "15", 15.0),
+        ("temperature (°c)", "15", 15.0),
+        ("OAT_K", "288.15", 15.0),
+        ("oat_f", "59", 15.0),
+    ] {
+        let (book, _) = import::read(&format!("rpm,{heading}\n2900,{cell}\n"), None).unwrap();
+        assert_eq!(book.readings[0].temperature_c, Some(celsius), "{heading}");
+    }
+    // 29.92 inches of mercury are 1013.2 hPa.
+    for (heading, cell) in [
+        ("pressure_pa", "101325"),
+        ("Pressure [hPa]", "1013.25"),
+        ("pressure_hpa", "1013.25"),
+        ("pressure_inhg", "29.92"),
+        ("Pressure (inHg)", "29.92"),
+    ] {
+        let (book, _) = import::read(&format!("rpm,{heading}\n2900,{cell}\n"), None).unwrap();
+        assert!((book.readings[0].pressure_pa.unwrap() - 101_325.0).abs() < 10.0, "{heading}");
+    }
+}
+
+#[test]
+fn a_throttle_may_be_a_share_a_percentage_or_full() {
+    for (heading, cell, share) in [
+        ("throttle", "0.8", 0.8),
+        ("throttle_%", "80", 0.8),
+        ("throttle", "80 %", 0.8),
+        ("throttle_%", "80%", 0.8),
+        ("throttle", "FULL", 1.0),
+        ("throttle", "−0", 0.0),
+    ] {
+        let (book, _) = import::read(&format!("rpm,{heading}\n2900,{cell}\n"), None).unwrap();
+        assert!((book.readings[0].throttle.unwrap() - share).abs() < 1e-12, "{heading} {cell}");
+    }
+    let (book, _) = import::read("rpm,throttle\n2900,\n", None).unwrap();
+    assert_eq!(book.readings[0].throttle, None);
 }
 
 #[test]

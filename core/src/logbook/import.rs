@@ -1,5 +1,5 @@
 //! Readings of a logbook as a sheet: `rpm` and any of `altitude` or `pressure`, `temperature`, `airspeed` (true), `throttle` (`full`, a
-//! share or %), `level` (`yes`), `fuel`, `current`, `note`; units in the headings.
+//! share, or a percentage by its heading or with its own %), `level` (`yes`), `fuel`, `current`, `note`; units in the headings.
 
 use crate::job::{LogReading, Logbook};
 use crate::sheet::{Quantity, Row, Sheet, SheetError};
@@ -17,13 +17,13 @@ const SPEED: &[(&str, f64, f64)] = &[
     ("mph", 0.447_04, 0.0),
 ];
 const PRESSURE: &[(&str, f64, f64)] =
-    &[("Pa", 1.0, 0.0), ("pa", 1.0, 0.0), ("hpa", 100.0, 0.0), ("mbar", 100.0, 0.0), ("inhg", 3_386.39, 0.0)];
+    &[("Pa", 1.0, 0.0), ("hPa", 100.0, 0.0), ("mbar", 100.0, 0.0), ("inHg", 3_386.39, 0.0)];
 const TEMPERATURE: &[(&str, f64, f64)] = &[
-    ("°c", 1.0, 0.0),
-    ("c", 1.0, 0.0),
-    ("°f", 5.0 / 9.0, -160.0 / 9.0),
-    ("f", 5.0 / 9.0, -160.0 / 9.0),
-    ("k", 1.0, -273.15),
+    ("°C", 1.0, 0.0),
+    ("C", 1.0, 0.0),
+    ("°F", 5.0 / 9.0, -160.0 / 9.0),
+    ("F", 5.0 / 9.0, -160.0 / 9.0),
+    ("K", 1.0, -273.15),
 ];
 
 const QUANTITIES: [Quantity; 10] = [
@@ -60,7 +60,7 @@ const QUANTITIES: [Quantity; 10] = [
         units: &[("kg/h", 1.0, 0.0), ("kg_per_h", 1.0, 0.0), ("kg_h", 1.0, 0.0)],
         allowed: 0.0..=2_000.0,
     },
-    Quantity { name: "current", names: &["current"], units: &[("a", 1.0, 0.0)], allowed: 0.0..=5_000.0 },
+    Quantity { name: "current", names: &["current"], units: &[("A", 1.0, 0.0)], allowed: 0.0..=5_000.0 },
     Quantity { name: "note", names: &["note", "remark", "what"], units: NONE, allowed: 0.0..=0.0 },
 ];
 
@@ -114,10 +114,21 @@ fn one(sheet: &Sheet, row: &Row) -> Result<LogReading, SheetError> {
 }
 
 fn throttle(sheet: &Sheet, row: &Row) -> Result<Option<f64>, SheetError> {
-    if sheet.word(row, "throttle").eq_ignore_ascii_case("full") {
+    let word = sheet.word(row, "throttle");
+    if word.eq_ignore_ascii_case("full") {
         return Ok(Some(1.0));
     }
-    sheet.figure(row, "throttle")
+    let number = |text: &str| text.trim().replace(',', ".").parse::<f64>().ok();
+    let refused = || sheet.refused(row, "throttle", "0 to 1, a percentage, or full");
+    match word.strip_suffix('%') {
+        // Its own sign counts, whatever the heading says.
+        Some(percent) => match number(percent).filter(|p| (0.0..=100.0).contains(p)) {
+            Some(percent) => Ok(Some(0.01 * percent)),
+            None => Err(refused()),
+        },
+        None if !word.is_empty() && number(&word.replace('−', "-")).is_none() => Err(refused()),
+        None => sheet.figure(row, "throttle"),
+    }
 }
 
 fn level(sheet: &Sheet, row: &Row) -> Result<bool, SheetError> {
