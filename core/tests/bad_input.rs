@@ -1,7 +1,7 @@
 //! Bad job files are refused by path, with what was found and what is allowed.
 
 use serde_json::{Value, json};
-use spokeshave::job::{DEMOS, Engine, Job, JobError, MOST_BYTES};
+use spokeshave::job::{DEMOS, Engine, Flange, Job, JobError, MOST_BYTES};
 
 fn demo() -> Value {
     serde_json::from_str(DEMOS[0].json).unwrap()
@@ -63,35 +63,54 @@ fn each_wrong_value_is_named_by_its_path() {
             json!([{"load": 0.5, "bsfc_kg_per_kwh": 0}]),
             "bsfc_by_load[0].bsfc_kg_per_kwh: 0",
         ),
-        ("/engine/bsfc_by_load", json!([{"load": 0.5}]), "engine.bsfc_by_load[0]: missing field"),
+        ("/engine/bsfc_by_load", json!([{"load": 0.5}]), "engine.bsfc_by_load[0]: the key `bsfc_kg_per_kwh`"),
         (
             "/engine/bsfc_by_load",
             json!([{"load": 0.5, "bsfc_kg_per_kwh": 0.3}, {"load": 0.5, "bsfc_kg_per_kwh": 0.3}]),
             "engine.bsfc_by_load[1].load: 0.5; allowed is above 0.5",
         ),
         ("/engine/kind", json!("steam"), "engine.kind: \"steam\""),
-        ("/engine/altitude_law", json!({"kind": "held-to"}), "engine.altitude_law: missing field"),
+        (
+            "/engine/altitude_law",
+            json!({"kind": "held-to"}),
+            "engine.altitude_law: the key `altitude_m` is missing",
+        ),
         ("/engine/turbo", json!(true), "engine.turbo: unknown field"),
         ("/aircraft/drag/cd0", json!(-0.03), "aircraft.drag.cd0: -0.03"),
         ("/aircraft/drag/k", Value::Null, "aircraft.drag: "),
-        ("/aircraft/mass_kg", Value::Null, "aircraft: missing field `mass_kg`"),
+        ("/aircraft/mass_kg", Value::Null, "aircraft: the key `mass_kg` is missing"),
         ("/flight_points/0/setting", json!({"kind": "rpm", "rpm": 0}), "flight_points[0].setting.rpm: 0"),
         ("/flight_points/0/setting", json!({"kind": "hope"}), "flight_points[0].setting"),
         ("/flight_points/2/airspeed_m_s", Value::Null, "flight_points[2].airspeed_m_s: missing"),
         ("/flight_points/2/altitude_m", json!(30_000), "flight_points[2].altitude_m: 30000"),
         ("/flight_points/1/name", json!("Standing start"), "flight_points[1].name"),
         ("/flight_points", json!([]), "flight_points: 0"),
-        ("/wood", json!({}), "wood: missing field `species`"),
+        ("/wood", json!({}), "wood: the key `species` is missing"),
         ("/wood", json!({"species": 7}), "wood.species: 7 is neither"),
-        ("/wood", json!({"species": {"name": "own"}}), "wood.species: missing field `density_kg_m3`"),
+        ("/wood", json!({"species": {"name": "own"}}), "wood.species: the key `density_kg_m3` is missing"),
         ("/wood", json!({"species": "pla", "moisture_percent": 90}), "wood.moisture_percent: 90"),
         ("/wood", json!({"species": "pla", "safety_factor": 0}), "wood.safety_factor: 0"),
         ("/wood", json!({"species": "pla", "overspeed": 0.9}), "wood.overspeed: 0.9"),
         ("/wood", json!({"species": "pla", "rake_deg": 40}), "wood.rake_deg: 40"),
         ("/wood", json!({"species": "pla", "limits": {"shear_pa": 1}}), "wood.limits.shear_pa: 1"),
         ("/wood", json!({"species": "pla", "limits": {"all": 1}}), "wood.limits.all: unknown field"),
-        ("/wood", json!({"species": "pla", "hub": {"bolts": 6}}), "wood.hub: missing field `thickness_m`"),
+        (
+            "/wood",
+            json!({"species": "pla", "hub": {"bolts": 6}}),
+            "wood.hub: the key `thickness_m` is missing",
+        ),
         ("/method", json!({"elements": 4}), "method.elements: 4"),
+        ("/colour", json!("red"), "colour: unknown field"),
+        ("/spokeshave", json!(7), "spokeshave: 7"),
+        ("/spokeshave", Value::Null, "spokeshave: missing"),
+        ("/propeller", Value::Null, "the key `propeller` is missing"),
+    ];
+    refused(&cases);
+}
+
+#[test]
+fn each_wrong_value_of_the_bench_is_named_by_its_path() {
+    refused(&[
         ("/bench", json!({"trailing_edge_m": 1}), "bench.trailing_edge_m: 1"),
         ("/bench", json!({"leading_edge_radius_m": -0.001}), "bench.leading_edge_radius_m: -0.001"),
         ("/bench", json!({"stacking_fraction": 1.5}), "bench.stacking_fraction: 1.5"),
@@ -100,7 +119,7 @@ fn each_wrong_value_is_named_by_its_path() {
         ("/bench", json!({"blank_width_m": "wide"}), "bench.blank_width_m: invalid type"),
         ("/bench", json!({"allowance_m": -1}), "bench.allowance_m: -1"),
         ("/bench", json!({"fan_step_deg": 90}), "bench.fan_step_deg: 90"),
-        ("/bench", json!({"flange": "sae-9"}), "bench.flange: unknown variant"),
+        ("/bench", json!({"flange": "sae-9"}), "bench.flange: `sae-9`; allowed is one of `sae-1`"),
         ("/bench", json!({"paper": "a4"}), "bench.paper: unknown field"),
         (
             "/bench",
@@ -112,12 +131,21 @@ fn each_wrong_value_is_named_by_its_path() {
             json!({"stacking_line": [{"radius_fraction": 0.5, "rake_m": 9}]}),
             "bench.stacking_line[0].rake_m: 9",
         ),
-        ("/colour", json!("red"), "colour: unknown field"),
-        ("/spokeshave", json!(7), "spokeshave: 7"),
-        ("/spokeshave", Value::Null, "spokeshave: missing"),
-        ("/propeller", Value::Null, "missing field `propeller`"),
-    ];
-    refused(&cases);
+    ]);
+}
+
+#[test]
+fn a_flange_is_written_with_a_hyphen_and_read_without_as_well() {
+    for (written, flange) in
+        [("sae-1", Flange::Sae1), ("sae1", Flange::Sae1), ("sae-2", Flange::Sae2), ("sae2", Flange::Sae2)]
+    {
+        let mut document = demo();
+        document["bench"] = json!({ "flange": written });
+        let job = Job::from_json(&document.to_string()).unwrap();
+        assert_eq!(job.bench.as_ref().unwrap().flange, Some(flange), "{written}");
+        let hyphened = format!("\"flange\": \"sae-{}\"", &written[written.len() - 1..]);
+        assert!(job.to_json().contains(&hyphened), "{written}");
+    }
 }
 
 #[test]
@@ -209,7 +237,11 @@ fn refused(cases: &[(&str, Value, &str)]) {
 fn wrong_wishes_are_named_by_their_path() {
     refused(&[
         ("/wishes", json!({"colour": 1}), "wishes.colour: unknown field"),
-        ("/wishes", json!({"aims": [{"flight_point": "Cruise"}]}), "wishes.aims[0]: missing field"),
+        (
+            "/wishes",
+            json!({"aims": [{"flight_point": "Cruise"}]}),
+            "wishes.aims[0]: the key `figure` is missing",
+        ),
         (
             "/wishes",
             json!({"aims": [{"flight_point": "Moon", "figure": "power_w"}]}),
@@ -218,14 +250,14 @@ fn wrong_wishes_are_named_by_their_path() {
         (
             "/wishes",
             json!({"aims": [{"flight_point": "Cruise", "figure": "beauty"}]}),
-            "wishes.aims[0].figure: unknown variant",
+            "wishes.aims[0].figure: `beauty`; allowed is one of `",
         ),
         (
             "/wishes",
             json!({"aims": [{"flight_point": "Cruise", "figure": "power_w", "weight": 0}]}),
             "wishes.aims[0].weight: 0",
         ),
-        ("/wishes", json!({"held": ["hope"]}), "wishes.held[0]: unknown variant"),
+        ("/wishes", json!({"held": ["hope"]}), "wishes.held[0]: `hope`; allowed is one of `"),
         ("/wishes", json!({"limits": {"tip_mach_most": 0}}), "wishes.limits.tip_mach_most: 0"),
         ("/wishes", json!({"limits": {"rpm_most": -1}}), "wishes.limits.rpm_most: -1"),
         ("/wishes", json!({"limits": {"stress_margin_least": -1}}), "wishes.limits.stress_margin_least: -1"),

@@ -103,8 +103,15 @@ fn shape_error(e: &serde_path_to_error::Error<serde_json::Error>) -> JobError {
     }
 }
 
-/// The names of the types in plain words.
+/// The reader's own words in plain ones: names of types, unknown words, missing keys.
 fn in_words(message: &str) -> String {
+    let unknown = message.strip_prefix("unknown variant ").and_then(|rest| rest.split_once(", expected "));
+    if let Some((found, allowed)) = unknown {
+        return format!("{found}; allowed is {allowed}");
+    }
+    if let Some(key) = message.strip_prefix("missing field ") {
+        return format!("the key {key} is missing");
+    }
     let plain = [
         ("expected f64", "a number is asked"),
         ("expected u32", "a whole number is asked"),

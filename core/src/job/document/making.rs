@@ -14,7 +14,8 @@ pub struct Making {
     /// The stacking line by rising radius; without it straight and square to the axis.
     #[serde(default, skip_serializing_if = "Vec::is_empty")]
     pub stacking_line: Vec<LinePoint>,
-    /// Least thickness of the trailing edge, m; without it a thousandth of the diameter.
+    /// Least thickness of the trailing edge, m, at most 5 % of every station's chord; without it a thousandth of the
+    /// diameter.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub trailing_edge_m: Option<f64>,
     /// Least radius of the leading edge, m; without it that of the section.
@@ -58,10 +59,11 @@ pub struct LinePoint {
 /// A standard flange.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, Serialize, Deserialize)]
 #[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
-#[serde(rename_all = "kebab-case")]
 pub enum Flange {
     /// SAE No. 1: six bolts of 3/8 in on a circle of 4 3/8 in.
+    #[serde(rename = "sae-1", alias = "sae1")]
     Sae1,
     /// SAE No. 2: six bolts of 1/2 in on a circle of 4 3/4 in.
+    #[serde(rename = "sae-2", alias = "sae2")]
     Sae2,
 }
