@@ -336,7 +336,32 @@ fn sheets_are_read_with_units_and_faults_have_line_and_column() {
             "blade,radius_m,angle\n1,540,18",
             "line 2, column 2: radius: \"540\"; allowed is 0.0001 to 6 m; perhaps it is in mm",
         ),
-        ("blade,radius_mm,angle\n1,840,18", "up to the tip, 760.0 mm"),
+        (
+            "blade,radius_mm,angle\n1,840,18",
+            "line 2, column 2: radius: \"840\"; allowed is 90.0 to 760.0 mm, from the hub to the tip",
+        ),
+        (
+            "blade,radius_mm,angle\n1,80,18",
+            "line 2, column 2: radius: \"80\"; allowed is 90.0 to 760.0 mm, from the hub to the tip",
+        ),
+        (
+            "blade,radius_mm,angle\n1,0.54,18",
+            "\"0.54\"; allowed is 90.0 to 760.0 mm, from the hub to the tip; perhaps it is in m",
+        ),
+        (
+            "blade;radius_cm;angle\n1;540,5;18",
+            "\"540,5\"; allowed is 90.0 to 760.0 mm, from the hub to the tip; perhaps it is in mm",
+        ),
+        (
+            "blade,station_%,angle\n1,0.7,18",
+            "line 2, column 2: station: \"0.7\"; allowed is 90.0 to 760.0 mm",
+        ),
+        (
+            "blade,radius_mm\n1,540\n1,600",
+            "line 1: no line holds an angle, a chord, a thickness or a track; there is no column angle, chord_mm, thickness_mm, track_mm",
+        ),
+        ("blade,radius_mm,face angle,chord_mm\n1,540,,", "there is no column thickness_mm, track_mm"),
+        ("radius_mm,angle,chord_mm,thickness_mm,track_mm\n540,,,,", "no line holds an angle"),
         ("blade,radius_mm,angle\n3,540,18", "1 to 2, the blades of the job"),
         ("blade,radius_mm,angle\n1.5,540,18", "a whole number"),
         ("blade,radius_mm,angle\n1,540,18\n1,540,19", "line 3, column 2: radius: \"540\""),

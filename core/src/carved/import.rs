@@ -3,7 +3,7 @@
 //! missing. An angle may be in degrees and minutes.
 
 use crate::job::{AngleReference, BladeReading, Carved, CarvedBlade, Propeller};
-use crate::sheet::{Quantity, Row, Sheet, SheetError};
+use crate::sheet::{Quantity, Row, Sheet, SheetError, likely};
 
 const LENGTH: &[(&str, f64, f64)] =
     &[("m", 1.0, 0.0), ("mm", 1e-3, 0.0), ("cm", 1e-2, 0.0), ("in", 0.0254, 0.0), ("inch", 0.0254, 0.0)];
@@ -62,6 +62,9 @@ pub fn read(text: &str, p: &Propeller, before: Option<&Carved>) -> Result<(Carve
         });
     }
     let angle = named.first().copied().unwrap_or("angle");
+    if sheet.rows().all(|row| READ.iter().chain([&angle]).all(|name| sheet.word(row, name).is_empty())) {
+        return Err(nothing_read(&sheet, angle));
+    }
     let mut blades = vec![CarvedBlade::default(); 1];
     for row in sheet.rows() {
         let (blade, reading) = one(&sheet, row, angle, p)?;
@@ -94,11 +97,7 @@ fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, B
             return Err(sheet.refused(row, name, "a number: where on the blade it was read"));
         }
     };
-    if radius_m > tip_m * (1.0 + 1e-9) {
-        let allowed =
-            format!("up to the tip, {:.1} mm; perhaps the unit in the heading is wrong", 1e3 * tip_m);
-        return Err(sheet.refused(row, name, &allowed));
-    }
+    within(sheet, row, p, (name, radius_m))?;
     let blade = sheet.figure(row, "blade")?.unwrap_or(1.0);
     if blade.fract() != 0.0 {
         return Err(sheet.refused(row, "blade", "a whole number from 1"));
@@ -123,6 +122,41 @@ fn one(sheet: &Sheet, row: &Row, angle: &str, p: &Propeller) -> Result<(usize, B
         return Err(sheet.refused(row, "thickness", allowed));
     }
     Ok((blade as usize, reading))
+}
+
+/// What a reading may hold besides the angle, by the names of the quantities.
+const READ: [&str; 3] = ["chord", "thickness", "track"];
+
+/// The fault of a sheet that says where but not what was read.
+fn nothing_read(sheet: &Sheet, angle: &str) -> SheetError {
+    let columns =
+        [(angle, "angle"), ("chord", "chord_mm"), ("thickness", "thickness_mm"), ("track", "track_mm")];
+    let missing: Vec<&str> = columns.iter().filter(|(name, _)| !sheet.has(name)).map(|c| c.1).collect();
+    let columns = if missing.is_empty() {
+        String::new()
+    } else {
+        format!("; there is no column {}", missing.join(", "))
+    };
+    let message = format!("no line holds an angle, a chord, a thickness or a track{columns}");
+    SheetError { line: sheet.header_line, column: None, message }
+}
+
+/// Refuses a place beyond the tip, or inside of both the hub and the innermost station drawn.
+fn within(sheet: &Sheet, row: &Row, p: &Propeller, (name, radius_m): (&str, f64)) -> Result<(), SheetError> {
+    let tip_m = 0.5 * p.diameter_m;
+    let hub_m = 0.5 * p.hub_diameter_m;
+    let first_m = p.stations.first().map_or(hub_m, |s| s.radius_fraction * tip_m);
+    let (low_m, from) = if first_m < hub_m { (first_m, "innermost station") } else { (hub_m, "hub") };
+    let allowed_m = low_m * (1.0 - 1e-9)..=tip_m * (1.0 + 1e-9);
+    if allowed_m.contains(&radius_m) {
+        return Ok(());
+    }
+    let written = sheet.word(row, "radius").replace(',', ".").parse::<f64>().ok();
+    let units: Vec<(f64, &str)> = LENGTH.iter().map(|u| (u.1, u.0)).collect();
+    let hint = written.filter(|_| name == "radius").map(|value| likely(value, allowed_m, &units));
+    let [low, high] = [low_m, tip_m].map(|m| 1e3 * m);
+    let allowed = format!("{low:.1} to {high:.1} mm, from the {from} to the tip{}", hint.unwrap_or_default());
+    Err(sheet.refused(row, name, &allowed))
 }
 
 /// The fault of a station that is no share of the radius: likely the number of a station.
