@@ -1,6 +1,6 @@
 //! Stations: the blade as drawn, and how each station works at each flight point.
 
-use crate::bench::sheet::table::{figures, words};
+use crate::bench::sheet::table::figures;
 use crate::drawn::stations;
 use crate::result::{PointResult, StationResult};
 
@@ -35,7 +35,6 @@ fn drawn(flow: &mut Flow, told: &Told) {
         figures("thickness\n% of chord", 20.0),
         figures("chord\nline °", 18.0),
         figures("flat\nface °", 18.0),
-        words("section", 34.0),
     ];
     flow.heading("As drawn");
     let all = stations(&told.rig.rotor.blade, p.angle_reference);
@@ -49,10 +48,28 @@ fn drawn(flow: &mut Flow, told: &Told) {
             fixed(100.0 * s.thickness_ratio, 1),
             DEGREES.figure(drawn.angle_deg),
             DEGREES.figure(drawn.face_angle_deg),
-            s.section.clone(),
         ]
     };
     flow.table(&columns, &p.stations.iter().zip(&all).enumerate().map(row).collect::<Vec<_>>());
+    flow.text(&format!("Sections by station: {}.", sections(told)));
+}
+
+/// The title of every station's section, stations of the same one joined.
+fn sections(told: &Told) -> String {
+    let families = &told.rig.rotor.blade.families;
+    let title = |name: &str| {
+        let family = families.iter().find(|f| f.about.name == name);
+        family.map_or_else(|| name.to_string(), |f| f.about.title.clone())
+    };
+    let stations = &told.rig.job.propeller.stations;
+    let mut first = 1;
+    let run = |same: &[crate::job::Station]| {
+        let last = first + same.len() - 1;
+        let numbers = if same.len() == 1 { first.to_string() } else { format!("{first} to {last}") };
+        first = last + 1;
+        format!("{numbers} {}", title(&same[0].section))
+    };
+    stations.chunk_by(|a, b| a.section == b.section).map(run).collect::<Vec<_>>().join("; ")
 }
 
 fn worked_out(flow: &mut Flow, told: &Told, point: &PointResult) {
