@@ -4,9 +4,15 @@ use std::collections::{HashMap, HashSet};
 
 use crate::paper::words_apart;
 use spokeshave::bench::{
-    Bench, BenchError, Fault, Item, Paper, Side, Solid, Unit, files, sheet_files, template_card,
+    Bench, BenchError, Fault, Item, Layer, Paper, Sheet, Side, Solid, Text, Unit, files, sheet_files,
+    template_card,
 };
-use spokeshave::job::{AngleReference, DEMOS, Flange, Hub, Job, Making, PitchControl, Rotation, Wood};
+use spokeshave::carved;
+use spokeshave::job::{
+    AngleReference, BladeReading, Carved, CarvedBlade, DEMOS, Flange, Hub, Job, Making, PitchControl,
+    Rotation, Wood,
+};
+use spokeshave::result::PlannedStation;
 use spokeshave::rig::Rig;
 
 fn demo(index: usize) -> Job {
@@ -272,6 +278,17 @@ fn what_cannot_be_made_is_said_with_its_place_and_its_amount() {
         matches!(thin[..], [Fault::ThickerThanBlank { by_mm, radius_mm, .. }] if (10.0..20.0).contains(&by_mm) && radius_mm > 0.0),
         "{thin:?}"
     );
+    let below_boss =
+        with(|job| job.bench = Some(Making { blank_thickness_m: Some(0.08), ..Making::default() }));
+    assert!(
+        matches!(below_boss[..], [Fault::ThickerThanBlank { by_mm, radius_mm: 0.0, .. }] if (by_mm - 10.0).abs() < 1e-6),
+        "{below_boss:?}"
+    );
+    let said = below_boss[0].to_string();
+    assert_eq!(
+        said,
+        "boss of the hub: the blank must be 90.0 mm thick, 10.0 mm more than the 80.0 mm it has"
+    );
     let narrow = with(|job| job.bench = Some(Making { blank_width_m: Some(0.15), ..Making::default() }));
     assert!(
         matches!(narrow[..], [Fault::WiderThanBlank { by_mm, radius_mm: 0.0, .. }] if (by_mm - 30.0).abs() < 1e-6),
@@ -335,6 +352,31 @@ fn what_cannot_be_made_is_said_with_its_place_and_its_amount() {
 }
 
 #[test]
+fn a_trailing_edge_too_thick_for_its_chord_is_refused_at_every_such_station() {
+    let with_edge = |edge_m: f64| {
+        let mut job = demo(0);
+        job.bench = Some(Making { trailing_edge_m: Some(edge_m), ..Making::default() });
+        bench(&job).err().map(|e| e.0).unwrap_or_default()
+    };
+    let chords_m: Vec<f64> = demo(0).propeller.stations.iter().map(|s| s.chord_m).collect();
+    let narrowest_m = chords_m.iter().copied().fold(f64::INFINITY, f64::min);
+    // Up to 5 % of the chord can be made, and no more.
+    assert_eq!(with_edge(0.049 * narrowest_m), []);
+    let wanted_m = 0.09 * narrowest_m;
+    let faults = with_edge(wanted_m);
+    assert_eq!(faults.len(), 3, "{faults:?}");
+    for fault in &faults {
+        let Fault::TrailingEdgeTooThick { station, radius_mm, wanted_mm, most_mm } = fault else {
+            panic!("{fault:?}")
+        };
+        let chord_mm = 1e3 * chords_m[station - 1];
+        assert!((most_mm - 0.05 * chord_mm).abs() < 1e-9 && wanted_mm > most_mm, "{fault:?}");
+        assert!((wanted_mm - 1e3 * wanted_m).abs() < 1e-9 && *radius_mm > 100.0, "{fault:?}");
+        assert!(fault.to_string().contains("bench.trailing_edge_m"), "{fault}");
+    }
+}
+
+#[test]
 fn all_text_stays_on_its_sheet_and_apart() {
     let mut inches = demo(0);
     inches.bench = Some(Making { fan_step_deg: Some(1.5), ..Making::default() });
@@ -357,6 +399,137 @@ fn all_text_stays_on_its_sheet_and_apart() {
             assert!(sizes.fold(f64::INFINITY, f64::min) >= 2.2, "letters that cannot be read in a shop");
         }
     }
+}
+
+/// Every line at the blade angle on the cards is at that angle, and carries its name; the pitch axis runs down to the wood.
+#[test]
+fn cards_show_the_blade_angle_and_the_pitch_axis() {
+    for job in faces() {
+        let bench = bench(&job).unwrap();
+        let sheets = bench.sheets(Paper::A4, Unit::Millimetre);
+        let cards = sheets.iter().filter(|s| s.name.starts_with("Templates")).flat_map(|s| &s.views);
+        let items: Vec<&Item> = cards.flat_map(|v| &v.drawing.items).collect();
+        let lines = |wanted: Layer| {
+            items.iter().filter_map(move |i| match i {
+                Item::Line { layer, points, .. } if *layer == wanted => Some([points[0], points[1]]),
+                _ => None,
+            })
+        };
+        let slopes: Vec<f64> = (bench.stations.iter())
+            .flat_map(|s| [Some(s.angle_rad), s.face_rad])
+            .flatten()
+            .map(|angle| bench.hand() * angle.tan())
+            .collect();
+        for [a, b] in lines(Layer::Guide) {
+            let slope = (b[1] - a[1]) / (b[0] - a[0]);
+            assert!(slopes.iter().any(|s| (s.atan() - slope.atan()).abs() < 1e-9), "{slope}");
+            assert!((b[0] - a[0]).hypot(b[1] - a[1]) >= 10.0);
+        }
+        let said =
+            |words: &str| items.iter().filter(|i| matches!(i, Item::Text(t) if t.words == words)).count();
+        let guides = lines(Layer::Guide).count();
+        assert_eq!(said("chord line") + said("face"), guides);
+        println!("{} guides {guides} of {}", job.title, 2 * bench.stations.len());
+        assert!(lines(Layer::Centre).all(|[a, b]| (a[0] - b[0]).abs() < 1e-9));
+        let long = lines(Layer::Centre).filter(|[a, b]| (a[1] - b[1]).abs() > 6.0).count();
+        println!("axes {} long {long}", lines(Layer::Centre).count());
+    }
+}
+
+/// Texts of a sheet in rows, each from left to right.
+fn rows_of(sheet: &Sheet) -> Vec<Vec<String>> {
+    let items = sheet.views.iter().flat_map(|v| &v.drawing.items);
+    let mut texts: Vec<&Text> =
+        items.filter_map(|i| if let Item::Text(t) = i { Some(t) } else { None }).collect();
+    texts.sort_by(|a, b| b.at[1].total_cmp(&a.at[1]).then(a.at[0].total_cmp(&b.at[0])));
+    let rows = texts.chunk_by(|a, b| (a.at[1] - b.at[1]).abs() < 1e-6);
+    rows.map(|row| row.iter().map(|t| t.words.clone()).collect()).collect()
+}
+
+/// The demo with readings of its first blade alone, 0.6 degrees coarse and left full, at all but the last two stations.
+fn carved() -> Job {
+    let mut job = demo(0);
+    let rig = Rig::new(&job).unwrap();
+    let reading = |radius_m: f64| {
+        let cut = rig.rotor.blade.cut(radius_m);
+        BladeReading {
+            radius_m,
+            angle_deg: Some(cut.angle_rad.to_degrees() + 0.6),
+            chord_m: Some(cut.chord_m + 0.002),
+            thickness_m: Some(cut.thickness_ratio * cut.chord_m + 0.0015),
+            ..BladeReading::default()
+        }
+    };
+    let readings = rig.rotor.blade.station_radii_m().take(9).map(reading).collect();
+    job.carved = Some(Carved { blades: vec![CarvedBlade { readings }], ..Carved::default() });
+    job
+}
+
+#[test]
+fn the_sheets_of_what_to_take_off_have_the_figures_of_the_plan() {
+    let job = carved();
+    let rig = Rig::new(&job).unwrap();
+    let plan = carved::plan(&rig, carved::usual_point(&rig)).unwrap();
+    let bench = bench(&job).unwrap();
+    for (paper, unit, per_m, digits) in
+        [(Paper::A4, Unit::Millimetre, 1e3, [1, 2]), (Paper::Letter, Unit::Inch, 1e3 / 25.4, [3, 3])]
+    {
+        let all = bench.sheets(paper, unit);
+        all.iter().for_each(words_apart);
+        let sheets: Vec<&Sheet> = all.iter().filter(|s| s.name.starts_with("Take off")).collect();
+        let names: Vec<&str> = sheets.iter().map(|s| s.name.as_str()).collect();
+        assert_eq!(names, ["Take off, blade 1", "Take off, blade 2"]);
+        let (size, depth) = (
+            |m: f64| format!("{:.*}", digits[0], per_m * m),
+            |m: f64| {
+                if m > 0.0 { format!("{:.*}", digits[1], per_m * m) } else { "–".into() }
+            },
+        );
+        for (sheet, blade) in sheets.iter().zip(&plan.blades) {
+            let rows = rows_of(sheet);
+            for s in &blade.stations {
+                let star = if s.read { "" } else { " *" };
+                let expected = vec![
+                    format!("{}{star}", size(s.radius_m)),
+                    depth(s.face_leading_m),
+                    depth(s.face_trailing_m),
+                    depth(s.back_m),
+                    depth(s.trailing_edge_m),
+                    format!("{:.1}°", s.face_angle_deg.unwrap()),
+                    size(s.chord_m),
+                    size(s.thickness_m),
+                ];
+                assert!(rows.contains(&expected), "{expected:?} is not among {rows:#?}");
+            }
+            let says = |words: &str| rows.iter().flatten().any(|t| t.contains(words));
+            assert!(says("Wood only comes off. Cut less than it says, and measure again."));
+            assert!(says("not read, so not turned") && says(&plan.flight_point) && says("After the cuts"));
+            assert_eq!(says("Nothing is to be taken off this blade"), blade.blade == 2);
+            let texts = sheet.views.iter().flat_map(|v| &v.drawing.items);
+            let sizes = texts.filter_map(|i| if let Item::Text(t) = i { Some(t.size_mm) } else { None });
+            assert!(sizes.fold(f64::INFINITY, f64::min) >= 3.5, "large letters");
+        }
+    }
+    let cuts = |s: &PlannedStation| s.face_trailing_m.max(s.face_leading_m).max(s.back_m) > 0.0;
+    assert!(plan.blades[0].stations.iter().filter(|s| cuts(s)).count() > 5, "something is cut");
+    let none = self::bench(&demo(0)).unwrap();
+    let sheets = none.sheets(Paper::A4, Unit::Millimetre);
+    assert!(none.take_off().is_none() && !sheets.iter().any(|s| s.name.starts_with("Take off")));
+}
+
+#[test]
+fn a_long_plan_is_laid_over_several_sheets() {
+    let mut job = carved();
+    let readings = &mut job.carved.as_mut().unwrap().blades[0].readings;
+    let more = (0..30).map(|k| BladeReading { radius_m: 0.135 + 0.015 * f64::from(k), ..readings[0] });
+    let chord_alone = |r: BladeReading| BladeReading { angle_deg: None, thickness_m: None, ..r };
+    let apart = |r: &BladeReading| readings.iter().all(|o| (o.radius_m - r.radius_m).abs() > 0.002);
+    let all: Vec<BladeReading> = more.filter(apart).map(chord_alone).collect();
+    readings.extend(all);
+    readings.sort_by(|a, b| a.radius_m.total_cmp(&b.radius_m));
+    let sheets = bench(&job).unwrap().sheets(Paper::Letter, Unit::Millimetre);
+    sheets.iter().for_each(words_apart);
+    assert!(sheets.iter().any(|s| s.name == "Take off, blade 1, part 2 of 2"));
 }
 
 /// A blade that does not hold is not made by mistake: every sheet says so, and the card in full.

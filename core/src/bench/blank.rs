@@ -98,11 +98,13 @@ impl Blank {
         let mut faults = Vec::new();
         let boss_thickness_m = boss_thickness_m(job);
         let reach = axial_reach(&rings);
-        let needed_m = (reach.high - reach.low).max(boss_thickness_m.unwrap_or(0.0));
+        let blade_m = reach.high - reach.low;
+        let needed_m = blade_m.max(boss_thickness_m.unwrap_or(0.0));
         let thickness_m = match form.making.blank_thickness_m {
             Some(given_m) => {
                 if given_m < needed_m - 1e-9 {
-                    let [radius_mm, needed_mm, given_mm] = [reach.at, needed_m, given_m].map(|v| 1e3 * v);
+                    let at_m = if needed_m > blade_m { 0.0 } else { reach.at };
+                    let [radius_mm, needed_mm, given_mm] = [at_m, needed_m, given_m].map(|v| 1e3 * v);
                     let by_mm = needed_mm - given_mm;
                     faults.push(Fault::ThickerThanBlank { radius_mm, needed_mm, given_mm, by_mm });
                 }

@@ -219,11 +219,7 @@ impl Item {
         match self {
             Self::Line { points, .. } => points.clone(),
             Self::Circle { centre: [x, y], radius_mm: r, .. } => vec![[x - r, y - r], [x + r, y + r]],
-            Self::Text(text) => {
-                let [x, y] = text.at;
-                let left = x + text.left_mm();
-                vec![[left, y - 0.22 * text.size_mm], [left + text.breadth_mm(), y + 0.73 * text.size_mm]]
-            }
+            Self::Text(text) => text.corners().to_vec(),
         }
     }
 }

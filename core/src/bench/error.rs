@@ -36,13 +36,28 @@ pub enum Fault {
         /// How far inside, mm.
         by_mm: f64,
     },
-    /// The blade is thicker than the blank.
+    /// The trailing edge that the job names is too thick for a station.
     #[error(
-        "r {radius_mm:.1} mm: the blade needs {needed_mm:.1} mm of the blank's thickness, {by_mm:.1} mm more than the \
-         {given_mm:.1} mm it has"
+        "station {station}, r {radius_mm:.1} mm: a trailing edge of {wanted_mm:.2} mm is wanted (bench.trailing_edge_m); at \
+         most {:.2} mm can be drawn there, 5 % of the chord or what the section has itself", floored(*most_mm)
+    )]
+    TrailingEdgeTooThick {
+        /// Number of the station, from 1.
+        station: usize,
+        /// Its radius, mm.
+        radius_mm: f64,
+        /// Thickness wanted, mm.
+        wanted_mm: f64,
+        /// Most that can be drawn, mm.
+        most_mm: f64,
+    },
+    /// The blade or its boss is thicker than the blank.
+    #[error(
+        "{}: the blank must be {needed_mm:.1} mm thick, {by_mm:.1} mm more than the {given_mm:.1} mm it has",
+        place(*radius_mm)
     )]
     ThickerThanBlank {
-        /// Radius of the section that reaches farthest, mm.
+        /// Radius of the section that reaches farthest, mm; 0 for the boss.
         radius_mm: f64,
         /// Thickness needed along the axis, mm.
         needed_mm: f64,
@@ -53,7 +68,8 @@ pub enum Fault {
     },
     /// The blade or its hub is wider than the blank.
     #[error(
-        "r {radius_mm:.1} mm: the blank must be {needed_mm:.1} mm wide, {by_mm:.1} mm more than the {given_mm:.1} mm it has"
+        "{}: the blank must be {needed_mm:.1} mm wide, {by_mm:.1} mm more than the {given_mm:.1} mm it has",
+        place(*radius_mm)
     )]
     WiderThanBlank {
         /// Radius of the section that reaches farthest, mm; 0 for the hub.
@@ -109,6 +125,16 @@ pub enum Fault {
         /// Distance between the two places of the outline that cross, along the outline, mm.
         by_mm: f64,
     },
+}
+
+/// Where a blank is too small: 0 is the boss.
+fn place(radius_mm: f64) -> String {
+    if radius_mm == 0.0 { "boss of the hub".into() } else { format!("r {radius_mm:.1} mm") }
+}
+
+/// A hundredth that is not more than a length, mm.
+fn floored(length_mm: f64) -> f64 {
+    (100.0 * length_mm).floor() / 100.0
 }
 
 /// Everything that keeps a blade from being drawn.

@@ -9,7 +9,8 @@ use super::shape::Shape;
 
 /// Points on each side of a section, from edge to edge.
 pub const SIDE_POINTS: usize = 64;
-/// Thickest trailing edge, in chords: near the tip the least thickness gives way to it.
+/// Thickest trailing edge that is drawn, in chords: where the tip is rounded, and everywhere if the job names none, the least thickness
+/// gives way to it.
 const THICKEST_EDGE: f64 = 0.05;
 /// Stations closer to the tip than this share of the radius take part in its rounding.
 const AT_TIP: f64 = 0.995;
@@ -35,7 +36,7 @@ impl Form {
     /// The form of a job's blade.
     ///
     /// # Errors
-    /// A section that cannot be drawn, or a station inside the hub.
+    /// A section that cannot be drawn, a station inside the hub, or one too narrow for the trailing edge that the job names.
     pub fn new(job: &Job, blade: &Blade) -> Result<Self, BenchError> {
         let making = job.bench.clone().unwrap_or_default();
         let mut faults = Vec::new();
@@ -50,7 +51,14 @@ impl Form {
             }
             let least_radius = making.leading_edge_radius_m.unwrap_or(0.0) / station.chord_m;
             match job.section_outline(&station.section, station.thickness_ratio) {
-                Some(outline) => stations.push((radius_m, Shape::new(&outline, SIDE_POINTS, least_radius))),
+                Some(outline) => {
+                    let shape = Shape::new(&outline, SIDE_POINTS, least_radius);
+                    let named_m = making.trailing_edge_m.filter(|_| radius_m < AT_TIP * blade.radius_m);
+                    faults.extend(
+                        named_m.and_then(|m| edge_too_thick(m, &shape, (i + 1, radius_m, station.chord_m))),
+                    );
+                    stations.push((radius_m, shape));
+                }
                 None => faults.push(Fault::NoOutline {
                     station: i + 1,
                     radius_mm,
@@ -77,6 +85,15 @@ impl Form {
     #[must_use]
     pub fn trailing_edge_m(&self) -> f64 {
         self.making.trailing_edge_m.unwrap_or(0.002 * self.blade.radius_m)
+    }
+
+    /// Whether some station is so narrow that its trailing edge is thinner than that: only where the job names none.
+    #[must_use]
+    pub fn edge_gives_way(&self) -> bool {
+        let drawn = self.station_radii_m().filter(|r| *r < AT_TIP * self.blade.radius_m);
+        drawn
+            .map(|r| self.blade.cut(r).chord_m)
+            .any(|chord_m| self.trailing_edge_m() > THICKEST_EDGE * chord_m)
     }
 
     /// Radii of the stations that are drawn, m.
@@ -133,6 +150,22 @@ impl Form {
         let edge = self.trailing_edge_m() / chord_m.max(f64::MIN_POSITIVE);
         shape.with_edge(edge.min(THICKEST_EDGE))
     }
+}
+
+/// The fault of a trailing edge (m) that a section, with its number, radius and chord (m), has not by itself and cannot be given.
+fn edge_too_thick(
+    wanted_m: f64,
+    shape: &Shape,
+    (station, radius_m, chord_m): (usize, f64, f64),
+) -> Option<Fault> {
+    let most_m = THICKEST_EDGE.max(shape.edge()) * chord_m;
+    let [radius_mm, wanted_mm, most_mm] = [radius_m, wanted_m, most_m].map(|m| 1e3 * m);
+    (wanted_m > most_m * (1.0 + 1e-9)).then_some(Fault::TrailingEdgeTooThick {
+        station,
+        radius_mm,
+        wanted_mm,
+        most_mm,
+    })
 }
 
 /// Where the rounding of the tip begins: not inboard of the last station that is not at the tip itself.

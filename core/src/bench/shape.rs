@@ -39,13 +39,17 @@ impl Shape {
 
     /// The same with its trailing edge at least so thick, in chords.
     pub(super) fn with_edge(mut self, least: f64) -> Self {
-        let (a, b) = (self.points[0], self.points[self.points.len() - 1]);
-        let added = least - (a[1] - b[1]);
+        let added = least - self.edge();
         if added > 0.0 {
             let nose = self.points.len() / 2;
             thicken(&mut self.points, nose, self.thickness_at, added, self.has_face);
         }
         self
+    }
+
+    /// Thickness of its trailing edge, in chords.
+    pub(super) fn edge(&self) -> f64 {
+        self.points[0][1] - self.points[self.points.len() - 1][1]
     }
 
     /// Centroid, in chords.

@@ -1,6 +1,7 @@
 //! What the sheets show: one module per drawing, each in millimetres at full size.
 
 mod card;
+mod guides;
 mod hub;
 mod joint;
 mod layers;
@@ -8,6 +9,7 @@ mod plan;
 mod side;
 mod station;
 pub(crate) mod table;
+mod take_off;
 mod template;
 
 pub use layers::stack_drawing;
@@ -36,6 +38,7 @@ pub fn leaves(bench: &Bench, paper: Paper, unit: Unit) -> Vec<Leaf> {
         leaves.push(joint::leaf(bench, unit, room));
     }
     leaves.extend(template::leaves(bench, unit, room));
+    leaves.extend(take_off::leaves(bench, unit, room));
     leaves
 }
 

@@ -47,6 +47,15 @@ impl Unit {
         }
     }
 
+    /// The depth of a cut (m) as a figure: to a hundredth of a millimetre, or a thousandth of an inch.
+    #[must_use]
+    pub fn fine(self, metres: f64) -> String {
+        match self {
+            Self::Millimetre => format!("{:.2}", 1e3 * metres),
+            Self::Inch => self.figure(metres),
+        }
+    }
+
     /// A length (m) with its unit.
     #[must_use]
     pub fn say(self, metres: f64) -> String {

@@ -3,8 +3,9 @@
 use std::f64::consts::TAU;
 use std::sync::OnceLock;
 
+use crate::carved;
 use crate::job::{Job, Rotation};
-use crate::result::Verdict;
+use crate::result::{RemovalPlan, Verdict};
 use crate::rig::Rig;
 use crate::wood;
 
@@ -54,6 +55,7 @@ pub struct Bench {
     /// Stations between hub and tip.
     pub stations: Vec<Carved>,
     verdict: OnceLock<Result<Verdict, String>>,
+    take_off: OnceLock<Option<RemovalPlan>>,
 }
 
 impl Bench {
@@ -96,7 +98,15 @@ impl Bench {
                 }
             })
             .collect();
-        Ok(Self { job: job.clone(), form, blank, rings, stations, verdict: OnceLock::new() })
+        Ok(Self {
+            job: job.clone(),
+            form,
+            blank,
+            rings,
+            stations,
+            verdict: OnceLock::new(),
+            take_off: OnceLock::new(),
+        })
     }
 
     /// What must be said of the blade's strength on every sheet that it is made from; worked out once, when it is first asked for.
@@ -110,6 +120,18 @@ impl Bench {
             Ok(verdict) => verdict.warning(),
             Err(why) => Some(format!("STRENGTH NOT JUDGED: {why}")),
         }
+    }
+
+    /// What to take off the carved blades, planned for the usual flight point; `None` without readings, or where they allow no plan. Worked out once, when
+    /// it is first asked for.
+    #[must_use]
+    pub fn take_off(&self) -> Option<&RemovalPlan> {
+        let planned = || {
+            self.job.carved.as_ref()?;
+            let rig = Rig::new(&self.job).ok()?;
+            carved::plan(&rig, carved::usual_point(&rig)).ok()
+        };
+        self.take_off.get_or_init(planned).as_ref()
     }
 
     /// 1 where the leading edge is to the right of a section seen from the tip, −1 where it is to the left.

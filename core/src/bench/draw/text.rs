@@ -31,6 +31,17 @@ pub(crate) fn breadth_mm(words: &str, size_mm: f64) -> f64 {
 }
 
 impl Text {
+    /// A plain text about the origin.
+    pub(crate) fn plain(words: &str, size_mm: f64) -> Self {
+        Self { at: [0.0; 2], size_mm, anchor: Anchor::Middle, bold: false, words: words.into() }
+    }
+
+    /// Lower left and upper right corner of its box, mm.
+    pub(crate) fn corners(&self) -> [[f64; 2]; 2] {
+        let [left, foot] = [self.at[0] + self.left_mm(), self.at[1]];
+        [[left, foot - 0.22 * self.size_mm], [left + self.breadth_mm(), foot + 0.73 * self.size_mm]]
+    }
+
     /// Its width, mm.
     #[must_use]
     pub fn breadth_mm(&self) -> f64 {

@@ -73,7 +73,7 @@ fn propeller(bench: &Bench, unit: Unit) -> Facts {
         ("turns", turning.into()),
         ("angle at 0.75 of the radius", format!("{:.1}° to the chord line", angle.to_degrees())),
         ("pitch of that angle", unit.say(pitch_m)),
-        ("least trailing edge", unit.say(form.trailing_edge_m())),
+        ("least trailing edge", edge(bench, unit)),
         ("least leading edge radius", nose),
         ("tip rounded over the last", unit.say(blade.radius_m - form.tip_from_m)),
     ];
@@ -83,6 +83,16 @@ fn propeller(bench: &Bench, unit: Unit) -> Facts {
         facts.insert(1, ("balanced by", weight.into()));
     }
     facts
+}
+
+/// The trailing edge, and where it is thinner.
+fn edge(bench: &Bench, unit: Unit) -> String {
+    let least = unit.say(bench.form.trailing_edge_m());
+    if bench.form.edge_gives_way() {
+        format!("{least}, or 5 % of the chord where that is less")
+    } else {
+        least
+    }
 }
 
 fn hub(bench: &Bench, unit: Unit) -> Facts {

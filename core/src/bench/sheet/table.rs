@@ -34,9 +34,20 @@ pub(crate) const fn words(head: &str, mm: f64) -> Column<'_> {
 /// Draws a table with its upper left corner at `at`: headings in as many lines as they need, words to the left, figures to the right; gives
 /// the height it takes, mm.
 pub(crate) fn table(drawing: &mut Drawing, at: [f64; 2], columns: &[Column], rows: &[Vec<String>]) -> f64 {
+    table_of(drawing, at, columns, rows, 1.0)
+}
+
+/// The same with letters and rows, but not columns, as many times as large.
+pub(crate) fn table_of(
+    drawing: &mut Drawing,
+    at: [f64; 2],
+    columns: &[Column],
+    rows: &[Vec<String>],
+    larger: f64,
+) -> f64 {
     let lines = columns.iter().map(|c| c.head.lines().count()).max().unwrap_or(1);
     let wide: f64 = columns.iter().map(|c| c.mm).sum();
-    let head = head_mm(columns);
+    let (head, row_mm, size_mm) = (larger * head_mm(columns), larger * ROW_MM, larger * SIZE_MM);
     let mut left = at[0];
     for (i, column) in columns.iter().enumerate() {
         let indent = if i > 0 { 2.0 } else { 0.0 };
@@ -45,21 +56,21 @@ pub(crate) fn table(drawing: &mut Drawing, at: [f64; 2], columns: &[Column], row
         left += column.mm;
         let text: Vec<&str> = column.head.lines().collect();
         for (k, line) in text.iter().enumerate() {
-            let y = at[1] - LINE_MM * (lines - text.len() + k + 1) as f64;
-            drawing.bold([x, y], 2.7, anchor, *line);
+            let y = at[1] - larger * LINE_MM * (lines - text.len() + k + 1) as f64;
+            drawing.bold([x, y], larger * 2.7, anchor, *line);
         }
         for (k, row) in rows.iter().enumerate() {
-            let y = at[1] - head - ROW_MM * (k as f64 + 1.0) + 1.8;
+            let y = at[1] - head - row_mm * (k as f64 + 1.0) + larger * 1.8;
             let cell = row.get(i).map_or("", String::as_str);
             let room = if column.words { column.mm - 1.5 - indent } else { f64::INFINITY };
-            drawing.text([x, y], SIZE_MM, anchor, fitted(cell, SIZE_MM, room));
+            drawing.text([x, y], size_mm, anchor, fitted(cell, size_mm, room));
         }
     }
     for k in 0..=rows.len() {
-        let y = at[1] - head - ROW_MM * k as f64;
+        let y = at[1] - head - row_mm * k as f64;
         drawing.line(Layer::Thin, [[at[0], y], [at[0] + wide, y]]);
     }
-    head + ROW_MM * rows.len() as f64
+    head + row_mm * rows.len() as f64
 }
 
 /// Height of a table's headings, mm.

@@ -10,6 +10,7 @@ use crate::bench::page::{Leaf, wrapped};
 use crate::bench::unit::Unit;
 use crate::bench::work::{Bench, Carved};
 
+use super::guides;
 use super::table::lines;
 
 /// Which side of the section a card lies on.
@@ -84,7 +85,6 @@ fn drawn(bench: &Bench, station: &Carved, side: Side, unit: Unit) -> Drawing {
     drawing.line(Layer::Datum, card.datum);
     let y = card.datum[0][1];
     let inward = if side == Side::Upper { -1.0 } else { 1.0 };
-    drawing.line(Layer::Centre, [[0.0, y], [0.0, y + MARK_MM * inward]]);
     let words = words(station, side, unit);
     // Behind the blade on the upper card, ahead of it on the lower one: there the card is tall.
     let [trail_x, lead_x] = card.datum.map(|p| p[0]);
@@ -102,12 +102,13 @@ fn drawn(bench: &Bench, station: &Carved, side: Side, unit: Unit) -> Drawing {
     let clear = all.into_iter().find(|(size, lines)| clear_of_wood(&block(*size, *lines), &card, side));
     let (size, lines) = clear.unwrap_or((SMALLEST_MM, 1));
     drawing.items.extend(block(size, lines).into_iter().map(Item::Text));
+    guides::draw(&mut drawing, bench, station, side, &card);
     drawing
 }
 
 /// Sizes of the letters on a card, mm.
 const LARGEST_MM: f64 = 3.0;
-const SMALLEST_MM: f64 = 2.2;
+pub(super) const SMALLEST_MM: f64 = 2.2;
 
 /// Lines of words from a datum edge inward, the first one on top and bold.
 fn written(words: &[String], [x, y]: [f64; 2], inward: f64, anchor: Anchor, size_mm: f64) -> Vec<Text> {
@@ -130,7 +131,7 @@ fn clear_of_wood(words: &[Text], card: &Card, side: Side) -> bool {
     words.iter().all(|text| card.on_wood.iter().all(|p| clear(text, p)))
 }
 
-/// Length of the mark on a datum edge, mm.
+/// Between a datum edge and the words, mm.
 const MARK_MM: f64 = 2.5;
 
 /// What stands on a card.
@@ -150,8 +151,8 @@ fn words(station: &Carved, side: Side, unit: Unit) -> Vec<String> {
 fn note(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<String> {
     let words = format!(
         "Seen from the tip towards the hub. Back cards lie on the back of the blade (cambered, forward), face cards on its face (flat, rear); a pair meets along the \
-         chord line, here drawn apart. Thick edges are the datum: square to the axis, {} ahead of the front and behind the rear of the blank. The mark on them is the \
-         middle line of the blank (pitch axis). Cut on the line, glue to card or ply.",
+         chord line, here drawn apart. Thick edges are the datum: square to the axis, {} ahead of the front and behind the rear of the blank. Dash-dotted: the \
+         middle line of the blank (pitch axis). Dashed: a line at the blade angle, parallel to the chord line, on the face card of a flat face to that face. Cut on the line, glue to card or ply.",
         unit.say(1e-3 * datum_mm(bench))
     );
     wrapped(&words, NOTE_MM, room[0])
