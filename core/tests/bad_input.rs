@@ -1,7 +1,7 @@
 //! Bad job files are refused by path, with what was found and what is allowed.
 
 use serde_json::{Value, json};
-use spokeshave::job::{DEMOS, Engine, Flange, Job, JobError, MOST_BYTES};
+use spokeshave::job::{DEMOS, Engine, Flange, Job, JobError, MOST_BYTES, PitchControl};
 
 fn demo() -> Value {
     serde_json::from_str(DEMOS[0].json).unwrap()
@@ -35,6 +35,11 @@ fn each_wrong_value_is_named_by_its_path() {
         ("/propeller/hub_diameter_m", json!(1.6), "propeller.hub_diameter_m: 1.6"),
         ("/propeller/blades", json!(0), "propeller.blades: 0"),
         ("/propeller/pitch_control", json!({"kind": "magic"}), "propeller.pitch_control"),
+        (
+            "/propeller/pitch_control",
+            json!({"kind": "constant-speed", "rpm": 3400, "turn_min_deg": -5, "turn_max_deg": 20}),
+            "propeller.pitch_control.rpm: 3400 rpm, times gear_ratio 1 3400 rpm of the engine; allowed is up to 3300.0 rpm",
+        ),
         ("/engine/full_throttle/1/rpm", json!("fast"), "engine.full_throttle[1].rpm: invalid type"),
         ("/engine/full_throttle/1/rpm", json!(1000), "engine.full_throttle[1].rpm: 1000"),
         ("/engine/full_throttle", json!([{"rpm": 2000, "power_w": 40_000}]), "engine.full_throttle: 1"),
@@ -74,6 +79,11 @@ fn each_wrong_value_is_named_by_its_path() {
             "/engine/altitude_law",
             json!({"kind": "held-to"}),
             "engine.altitude_law: the key `altitude_m` is missing",
+        ),
+        (
+            "/engine/altitude_law",
+            json!({"kind": "held-to", "height_m": 3000}),
+            "engine.altitude_law.height_m: unknown field `height_m`",
         ),
         ("/engine/turbo", json!(true), "engine.turbo: unknown field"),
         ("/aircraft/drag/cd0", json!(-0.03), "aircraft.drag.cd0: -0.03"),
@@ -274,6 +284,32 @@ fn wrong_wishes_are_named_by_their_path() {
             "wishes.limits.rpm[0].most: 2000; allowed is 2500",
         ),
     ]);
+}
+
+#[test]
+fn a_wrong_mass_is_told_once() {
+    let message = refusal("/aircraft/mass_kg", json!(0));
+    assert!(message.starts_with("aircraft.mass_kg: 0") && !message.contains("fuel"), "{message}");
+}
+
+/// A governor holds the propeller's rpm; the limit is the engine's, or the end of its curve where none is given.
+#[test]
+fn a_governor_stays_within_the_engine_through_its_gear() {
+    let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    (piston.gear_ratio, piston.max_rpm) = (2.0, Some(3200.0));
+    let governed = |rpm: f64| PitchControl::ConstantSpeed { rpm, turn_min_deg: -5.0, turn_max_deg: 20.0 };
+    job.propeller.pitch_control = governed(1600.0);
+    assert_eq!(job.check(), []);
+    job.propeller.pitch_control = governed(1601.0);
+    let problem = &job.check()[0];
+    assert_eq!((problem.path.as_str(), problem.span), ("propeller.pitch_control.rpm", Some((10.0, 1600.0))));
+    assert!(problem.allowed.contains("engine.max_rpm"), "{problem}");
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    piston.max_rpm = None;
+    assert_eq!(job.check(), []);
+    job.propeller.pitch_control = governed(1651.0);
+    assert!(job.check()[0].allowed.contains("the end of engine.full_throttle"));
 }
 
 #[test]

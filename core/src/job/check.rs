@@ -10,7 +10,8 @@ use super::found::Found;
 use crate::air::{HIGHEST_M, LARGEST_OFFSET_K, LOWEST_M};
 use crate::section::{check_polars, library};
 use carved::check_carved;
-use engine::{check_electric, check_piston};
+pub use engine::most_governed_rpm;
+use engine::{check_electric, check_governor, check_piston};
 use logbook::check_logbook;
 use making::check_making;
 use wishes::check_wishes;
@@ -45,6 +46,7 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
     }
     check_sections(&mut found, &job.sections);
     check_propeller(&mut found, &job.propeller);
+    check_governor(&mut found, job);
     check_stations(&mut found, job);
     check_flight_points(&mut found, &job.flight_points);
     found.range("method.elements".into(), f64::from(job.method.elements), 10.0..=400.0, "");
@@ -71,6 +73,7 @@ pub(super) fn problems(job: &Job) -> Vec<Problem> {
 pub(super) fn propeller_problems(job: &Job) -> Vec<Problem> {
     let mut found = Found::default();
     check_propeller(&mut found, &job.propeller);
+    check_governor(&mut found, job);
     check_stations(&mut found, job);
     if let Some(wood) = &job.wood {
         check_wood(&mut found, wood, &job.propeller);

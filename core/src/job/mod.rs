@@ -10,7 +10,7 @@ mod error;
 mod found;
 mod own;
 
-pub use check::section_name_known;
+pub use check::{most_governed_rpm, section_name_known};
 pub use demo::{DEMOS, Demo};
 pub use document::{
     Aeroplane, Aim, Aircraft, AltitudeLaw, AngleReference, Battery, BladeReading, Carved, CarvedBlade, Drag,
@@ -91,8 +91,10 @@ fn syntax_error(file: &str, e: &serde_json::Error) -> JobError {
 
 fn shape_error(e: &serde_path_to_error::Error<serde_json::Error>) -> JobError {
     let (outer, text) = (e.path().to_string(), e.inner().to_string());
-    let (inner, message) = text.split_once(by_kind::PATH_MARK).unwrap_or(("", &text));
-    let path = [outer.as_str(), inner]
+    let (inner, message) = text.rsplit_once(by_kind::PATH_MARK).unwrap_or(("", &text));
+    // A kind inside a kind leaves a mark between each part of the path.
+    let inner = inner.replace(by_kind::PATH_MARK, ".");
+    let path = [outer.as_str(), &inner]
         .into_iter()
         .filter(|p| !p.is_empty() && *p != ".")
         .collect::<Vec<_>>()

@@ -1,7 +1,7 @@
 //! Any valid job.
 
 use proptest::prelude::*;
-use spokeshave::job::{DEMOS, FlightPoint, Job, PitchControl, Setting, Station};
+use spokeshave::job::{DEMOS, FlightPoint, Job, PitchControl, Setting, Station, most_governed_rpm};
 use spokeshave::section::library;
 
 /// How many random jobs a property is tried on: few each time, `SPOKESHAVE_CASES` times as many where that is set.
@@ -67,6 +67,11 @@ prop_compose! {
         job.propeller.diameter_m = job.propeller.diameter_m.max(0.5);
         job.propeller.hub_diameter_m = hub * job.propeller.diameter_m;
         job.propeller.pitch_control = pitch_control;
+        if let (PitchControl::ConstantSpeed { rpm, .. }, Some(most)) =
+            (&mut job.propeller.pitch_control, most_governed_rpm(job.engine.as_ref()))
+        {
+            *rpm = rpm.min(most);
+        }
         (job.method.compressibility, job.method.stall_delay, job.method.hub_loss) = (compressibility, stall_delay, hub_loss);
         let top = FlightPoint { name: "top".into(), altitude_m, isa_offset_k, airspeed_m_s: None, setting: Setting::FullThrottle {} };
         let asked = FlightPoint { name: "asked".into(), airspeed_m_s: Some(airspeed), setting, ..top.clone() };

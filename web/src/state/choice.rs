@@ -2,7 +2,7 @@
 
 use spokeshave::drawn::{measured_by, with_station};
 use spokeshave::job::{
-    Aim, AngleReference, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting,
+    Aim, AngleReference, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting, most_governed_rpm,
 };
 
 use super::notice::in_words;
@@ -115,12 +115,15 @@ impl ControlKind {
         }
     }
 
-    fn started(self) -> PitchControl {
+    /// As it begins on a job: a governor no faster than the engine may turn.
+    fn started(self, job: &Job) -> PitchControl {
         match self {
             Self::Fixed => PitchControl::Fixed {},
             Self::GroundAdjustable => PitchControl::GroundAdjustable { turn_deg: 0.0 },
             Self::ConstantSpeed => {
-                PitchControl::ConstantSpeed { rpm: 2_400.0, turn_min_deg: -5.0, turn_max_deg: 20.0 }
+                let most = most_governed_rpm(job.engine.as_ref()).unwrap_or(f64::INFINITY);
+                let rpm = most.min(2_400.0);
+                PitchControl::ConstantSpeed { rpm, turn_min_deg: -5.0, turn_max_deg: 20.0 }
             }
         }
     }
@@ -232,7 +235,7 @@ impl Choice {
         match self {
             Self::Reference(to) => return reference(job, *to),
             Self::Rotation(to) => next.propeller.rotation = *to,
-            Self::PitchControl(to) => next.propeller.pitch_control = to.started(),
+            Self::PitchControl(to) => next.propeller.pitch_control = to.started(job),
             Self::SectionOfAll(name) => {
                 next.propeller.stations.iter_mut().for_each(|s| s.section.clone_from(name));
             }

@@ -1,6 +1,6 @@
 //! What is allowed of an engine.
 
-use super::super::document::{Aircraft, AltitudeLaw, Electric, Piston};
+use super::super::document::{Aircraft, AltitudeLaw, Electric, Engine, Job, Piston, PitchControl};
 use super::super::found::Found;
 use crate::air::HIGHEST_M;
 
@@ -35,10 +35,47 @@ pub(super) fn check_piston(found: &mut Found, p: &Piston, aircraft: Option<&Airc
         Aircraft::Aeroplane(a) => a.mass_kg,
         Aircraft::Multirotor(m) => m.mass_kg,
     });
+    // A wrong mass is told by itself.
+    let mass_kg = mass_kg.filter(|mass| *mass > 0.0);
     let most_fuel = mass_kg.map_or(50_000.0, |m| (MOST_FUEL_SHARE * m).clamp(0.0, 50_000.0));
     found.optional(at("fuel_kg"), p.fuel_kg, 0.0..=most_fuel, "kg, part of the aircraft's mass");
     if let AltitudeLaw::HeldTo(held) = &p.altitude_law {
         found.range(at("altitude_law.altitude_m"), held.altitude_m, 0.0..=HIGHEST_M, "m");
+    }
+}
+
+/// The most propeller rpm a governor may hold on a piston engine, and what sets it: its limit or the end of its curve.
+fn most_governed(p: &Piston) -> (f64, &'static str) {
+    let last = p.full_throttle.last().map_or(f64::INFINITY, |f| f.rpm);
+    let limit = p.max_rpm.unwrap_or(f64::INFINITY);
+    let (most, of) =
+        if limit <= last { (limit, "engine.max_rpm") } else { (last, "the end of engine.full_throttle") };
+    (most / p.gear_ratio, of)
+}
+
+/// The most propeller rpm that a governor may hold on an engine; `None` where nothing sets it.
+#[must_use]
+pub fn most_governed_rpm(engine: Option<&Engine>) -> Option<f64> {
+    let Some(Engine::Piston(p)) = engine else { return None };
+    Some(most_governed(p).0).filter(|most| most.is_finite())
+}
+
+/// A governor that holds more rpm than a piston engine may turn, or than its curve tells of, governs nothing.
+pub(super) fn check_governor(found: &mut Found, job: &Job) {
+    let (Some(Engine::Piston(p)), PitchControl::ConstantSpeed { rpm, .. }) =
+        (&job.engine, &job.propeller.pitch_control)
+    else {
+        return;
+    };
+    let (most, of) = most_governed(p);
+    if *rpm > most * (1.0 + 1e-9) {
+        let gear = p.gear_ratio;
+        found.refuse(
+            "propeller.pitch_control.rpm".into(),
+            format!("{rpm} rpm, times gear_ratio {gear} {:.0} rpm of the engine", rpm * gear),
+            format!("up to {most:.1} rpm, with {:.0} rpm of the engine as {of} has it", most * gear),
+        );
+        found.within(10.0, most);
     }
 }
 
