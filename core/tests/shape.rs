@@ -1,7 +1,7 @@
 //! Shaped blades keep their promises when they are analysed anew.
 
 use spokeshave::fit;
-use spokeshave::job::{AngleReference, DEMOS, Job, Limits, PitchControl, Setting};
+use spokeshave::job::{AngleReference, DEMOS, Engine, Job, Limits, PitchControl, Setting};
 use spokeshave::result::{Brief, Figure, Limit, Origin, State, Tolerance};
 use spokeshave::rig::{Rig, air_of};
 use spokeshave::shape::adkins_liebeck::Wanted;
@@ -48,6 +48,29 @@ fn every_station_of_a_twisted_blade_works_at_its_best_angle() {
         }
     }
     assert!(answers >= 9, "only {answers} flight points have a twist");
+}
+
+/// A geared engine turns a big propeller slowly: the flow is steep, and Prandtl's factor is small well inboard of the tip.
+#[test]
+fn a_slow_propellers_outer_stations_work_at_their_best_angle_too() {
+    let mut job = demo(0).job;
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    piston.full_throttle.iter_mut().for_each(|p| p.rpm *= 1.75);
+    (piston.gear_ratio, piston.max_rpm) = (2.43, Some(5775.0));
+    job.propeller.diameter_m = 1.73;
+    let angles = [57.4, 47.5, 39.8, 34.3, 30.3, 27.2, 24.5, 22.2, 20.5, 19.6, 18.5];
+    for (station, angle) in job.propeller.stations.iter_mut().zip(angles) {
+        (station.chord_m, station.angle_deg) = (1.1 * station.chord_m, Some(angle));
+    }
+    let rig = Rig::new(&job).unwrap();
+    let shaped = twist(&rig, &alone(&rig, 2)).unwrap();
+    assert!(shaped.result.settled);
+    let result = Rig::new(&shaped.job).unwrap().point(2).unwrap();
+    let outer = result.stations.last().unwrap();
+    assert!(judged(outer.radius_fraction) && outer.loss_factor.unwrap() < 0.35, "{outer:?}");
+    for s in result.stations.iter().filter(|s| judged(s.radius_fraction)) {
+        assert!(s.departure_deg.unwrap().abs() < 0.05, "{} R: {:?}", s.radius_fraction, s.departure_deg);
+    }
 }
 
 #[test]
@@ -100,6 +123,9 @@ fn stations_of_a_governed_propeller_depart_alike() {
         .collect();
     let mean = all.iter().sum::<f64>() / all.len() as f64;
     assert!(all.iter().all(|d| (d - mean).abs() < 0.05), "{all:?}");
+    let told = shaped.result.governor_departure_deg.unwrap();
+    assert!((told - mean).abs() < 0.05, "{told} {mean}");
+    assert!(shaped.result.sentence().contains(&format!("{told:+.2}°")), "{}", shaped.result.sentence());
 }
 
 #[test]

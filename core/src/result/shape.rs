@@ -85,8 +85,12 @@ pub struct Twist {
     pub weights: Vec<(String, f64)>,
     /// Stations from hub to tip.
     pub stations: Vec<TwistStation>,
-    /// Whether blade and settings agree. Where a governor holds the rpm, they do once all stations depart alike: the common departure is the governor's.
+    /// Whether blade and settings agree. Where a governor holds the rpm, they do once all stations depart alike.
     pub settled: bool,
+    /// Where a governor sets the pitch: by how much all solved stations depart from their best angle, weighted over the points
+    /// that count, degrees; no twist changes that.
+    #[serde(skip_serializing_if = "Option::is_none")]
+    pub governor_departure_deg: Option<f64>,
     /// Passes between blade and settings.
     pub passes: u32,
     /// All flight points, drawn and shaped.
@@ -105,6 +109,21 @@ pub enum Bound {
     GreatestChord,
     /// The greatest chord, and more lift than the section safely gives: the station falls short of its share.
     NearStall,
+}
+
+impl Twist {
+    /// What became of it: whether blade and settings agree, and what a governor leaves.
+    #[must_use]
+    pub fn sentence(&self) -> String {
+        match (self.settled, self.governor_departure_deg) {
+            (false, _) => "Blade and settings did not come to rest.".into(),
+            (true, None) => "Blade and settings agree.".into(),
+            (true, Some(all)) => format!(
+                "The governor sets the pitch: at the rpm it holds all solved stations depart alike, by {all:+.2}° from their best \
+                 angle. No twist changes that; another rpm, diameter or chord does."
+            ),
+        }
+    }
 }
 
 /// A station of a least-loss blade.

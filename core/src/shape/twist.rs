@@ -4,8 +4,10 @@
 //! and Mach number, and `β = φ + α*`. The new blade meets the flight point's setting at another rpm, so blade and setting take turns until the angles rest.
 //! Along several flight points each station takes the angle of least `Σ w (α − α*)²` or of least weighted loss of lift-to-drag, which lies between
 //! its best angles. A governor gives rpm and power both, which angles at their best cannot meet as well: there the twist is the one with which all
-//! stations depart alike, and that common departure is the governor's. Near hub and tip, where Prandtl's
-//! factor leaves little load, no angle carries the lift: there the geometric pitch of the nearest solved station is held, so that the blade can be carved.
+//! stations depart alike, and that common departure is the governor's. Where no angle carries the lift, and inside 0.2 R and outside 0.95 R also where
+//! Prandtl's factor leaves little load, the geometric pitch of the nearest solved station is held, so that the blade can be carved.
+
+use std::ops::RangeInclusive;
 
 use super::brief::compared;
 use super::variant::{accepted, rounded, with_angles};
@@ -16,9 +18,11 @@ use crate::report::best_of;
 use crate::result::{Origin, Twist, TwistStation};
 use crate::rig::{Rig, air_of};
 use crate::rotor::Condition;
-use crate::rotor::element::Element;
+use crate::rotor::element::{Balance, Element};
 
-/// Least Prandtl factor at which a station is solved.
+/// Radius fractions between which every station with an answer is solved.
+const WORKING: RangeInclusive<f64> = 0.2..=0.95;
+/// Least Prandtl factor at which one nearer to hub or tip is solved.
 const LEAST_FACTOR: f64 = 0.35;
 /// Angles rest when none changes by more, rad.
 const AT_REST_RAD: f64 = 1e-6;
@@ -92,9 +96,11 @@ pub fn twist_by(rig: &Rig, weights: &[f64], by: TwistBy) -> Result<Shaped<Twist>
         origins = from;
     }
     let counted = counted(&now, weights).map_err(with_new_angles)?;
+    let stations = stations(rig, &now, &origins, &counted);
     let result = Twist {
         weights: counted.iter().map(|c| (rig.job.flight_points[c.index].name.clone(), c.weight)).collect(),
-        stations: stations(rig, &now, &origins, &counted),
+        governor_departure_deg: if governed { common(&stations, &counted) } else { None },
+        stations,
         settled,
         passes,
         flight_points: compared(rig, &now),
@@ -128,6 +134,11 @@ fn counted(rig: &Rig, weights: &[f64]) -> Result<Vec<Counted>, ShapeError> {
     all.and_then(|all| if all.is_empty() { Err(ShapeError::NoWeight) } else { Ok(all) })
 }
 
+/// Whether a station carries enough to be solved for itself.
+fn loaded(rig: &Rig, radius_m: f64, balance: &Balance) -> bool {
+    WORKING.contains(&(radius_m / rig.rotor.blade.radius_m)) || balance.loss > LEAST_FACTOR
+}
+
 /// The drawn angle of least weighted departure at a radius, rad; `None` where no point that counts can be carried.
 fn solved(rig: &Rig, radius_m: f64, counted: &[Counted], by: TwistBy) -> Option<f64> {
     let ring = rig.rotor.ring(radius_m);
@@ -135,7 +146,7 @@ fn solved(rig: &Rig, radius_m: f64, counted: &[Counted], by: TwistBy) -> Option<
     for c in counted {
         let element = rig.rotor.element(&ring, &c.at).0;
         let Some(best) = best_of(&element) else { continue };
-        let Some(balance) = element.balance_at(best.alpha_rad).filter(|b| b.loss > LEAST_FACTOR) else {
+        let Some(balance) = element.balance_at(best.alpha_rad).filter(|b| loaded(rig, radius_m, b)) else {
             continue;
         };
         let angle = balance.inflow_rad + best.alpha_rad - c.at.turn_rad;
@@ -161,7 +172,8 @@ fn alike(rig: &Rig, counted: &[Counted]) -> Vec<Option<f64>> {
         let ring = rig.rotor.ring(radius_m);
         let one = |c: &Counted| {
             let element = rig.rotor.element(&ring, &c.at).0;
-            let (best, balance) = (best_of(&element)?, element.balance().filter(|b| b.loss > LEAST_FACTOR)?);
+            let (best, balance) =
+                (best_of(&element)?, element.balance().filter(|b| loaded(rig, radius_m, b))?);
             Some((c.weight, c.weight * (balance.alpha_rad - best.alpha_rad)))
         };
         let known: Option<Vec<(f64, f64)>> = counted.iter().map(one).collect();
@@ -173,6 +185,19 @@ fn alike(rig: &Rig, counted: &[Counted]) -> Vec<Option<f64>> {
     let mean = departures.iter().flatten().sum::<f64>() / count;
     let angle = |(r, d): (f64, &Option<f64>)| d.map(|d| blade.cut(r).angle_rad - (d - mean));
     blade.station_radii_m().zip(&departures).map(angle).collect()
+}
+
+/// The departure that the solved stations have in common, weighted over the points that count, degrees.
+fn common(stations: &[TwistStation], counted: &[Counted]) -> Option<f64> {
+    let solved = stations.iter().filter(|s| s.origin == Origin::Solved);
+    let one = |s: &TwistStation| {
+        let parts = s.departures_deg.iter().zip(counted);
+        let (sum, weight) = parts
+            .fold((0.0, 0.0), |(sum, w), (d, c)| d.map_or((sum, w), |d| (sum + c.weight * d, w + c.weight)));
+        (weight > 0.0).then_some(sum / weight)
+    };
+    let all: Vec<f64> = solved.filter_map(one).collect();
+    (!all.is_empty()).then(|| all.iter().sum::<f64>() / all.len() as f64)
 }
 
 struct Wanted<'f> {

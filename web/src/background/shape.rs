@@ -118,8 +118,9 @@ fn done(rig: &Rig, task: &Task, hear: impl FnMut(&Report)) -> Result<Report, Sha
     Ok(match task {
         Task::Twist(weights) => {
             let shaped = twist(rig, weights)?;
-            let settled = "Blade and settings did not come to rest.";
-            let said = if shaped.result.settled { Vec::new() } else { vec![settled.to_string()] };
+            let told = &shaped.result;
+            let plain = told.settled && told.governor_departure_deg.is_none();
+            let said = if plain { Vec::new() } else { vec![told.sentence()] };
             Report::Blade(Box::new(shaped.job.propeller), said)
         }
         Task::LeastLoss(point) => {

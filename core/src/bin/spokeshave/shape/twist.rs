@@ -56,12 +56,11 @@ fn text(t: &Twist) -> String {
     let mut header = vec!["r mm", "r/R", "drawn °", "new °", "on the face °"];
     header.extend(t.weights.iter().map(|(name, _)| name.as_str()));
     header.push("");
-    let settled =
-        if t.settled { "Blade and settings agree." } else { "Blade and settings did not come to rest." };
     let rows = t.stations.iter().map(row).collect();
     format!(
-        "Best-incidence twist for {}\n{settled}\n\n{}\n\n{}",
+        "Best-incidence twist for {}\n{}\n\n{}\n\n{}",
         names.join(", "),
+        t.sentence().replace('-', "−"),
         table(&header, rows),
         compared(&t.flight_points)
     )
