@@ -4,7 +4,7 @@
 //! by A. W. Gagg and E. V. Ferrar, SAE Trans. 29, 1934: `P/P0 = σ − (1 − σ)/7.55`, or held up to a height and by the
 //! same law from there.
 //!
-//! Electric: the first-order motor, `Q = Kt (I − I0)`, `Kt = 30/(π Kv)`, `I = (d Voc − n/Kv)/(Rm + Rc + N d² Rb)` at
+//! Electric: the first-order motor, `Q = Kt (I − I0)` with the same no-load current `I0` at every voltage and rpm, `Kt = 30/(π Kv)`, `I = (d Voc − n/Kv)/(Rm + Rc + N d² Rb)` at
 //! duty d, with the sag of the battery that N motors share; the current limit holds the current. All rpm are of the
 //! propeller unless they say otherwise.
 
@@ -125,7 +125,7 @@ impl Shaft {
     }
 
     /// How long the fuel, or the usable charge, feeds all engines at a propeller rpm and shaft power of each, s. Fuel
-    /// and battery are the aircraft's. `None` where they are not given, the load cannot be met or nothing is drawn.
+    /// and battery are the aircraft's. `None` where they are not given or empty, the load cannot be met or nothing is drawn.
     #[must_use]
     pub fn endurance_s(&self, rpm: f64, power_w: f64, air: &Air, engines: f64) -> Option<f64> {
         let (store, drain) = match self {
@@ -138,7 +138,7 @@ impl Shaft {
                 )
             }
         };
-        (drain > 0.0).then(|| store / (drain * engines))
+        (drain > 0.0 && store > 0.0).then(|| store / (drain * engines))
     }
 
     /// The electric side at a propeller rpm and shaft power; `None` for a piston engine or where no duty up to 1

@@ -46,7 +46,7 @@ pub use envelope::envelope;
 pub use held::held;
 pub use line::{Along, level_line, line};
 pub use matched::matched;
-pub use meeting::meeting;
+pub use meeting::{beyond_engine, meeting};
 pub use near::{Answer, Near, answer};
 pub use offer::{Offer, offer, offer_crossings};
 pub use take_off::{take_off, take_off_in};
@@ -54,6 +54,8 @@ pub use worth::pitch_worth;
 
 /// Fastest tip considered where no engine sets a limit, as a Mach number.
 const FASTEST_TIP_MACH: f64 = 1.2;
+/// Steps over the engine's range in search of its greatest power.
+const POWER_STEPS: u32 = 64;
 /// Slowest rotation considered over the fastest.
 const SLOWEST: f64 = 0.01;
 
@@ -95,14 +97,35 @@ pub fn throttle_condition(rig: &Rig, at: &Condition, throttle: f64) -> Result<Co
     Solver::new(rig).throttle(at, throttle, &Trail::default()).map(|met| met.condition)
 }
 
-/// What the engine has to spare at a condition at which the propeller takes a power, W: of its rpm limit as a share of it, and of
-/// power as a share of what is taken. Below zero is short; `None` without an engine.
+/// What the engine has to spare.
+#[derive(Clone, Copy, Debug, PartialEq)]
+pub struct Spare {
+    /// Of its rpm limit, as a share of it; below zero is past it.
+    pub rpm_share: f64,
+    /// Of power at this rpm, or at the limit where that is past it, as a share of what is taken; below zero is short.
+    pub power_share: f64,
+    /// Greatest propeller rpm.
+    pub highest_rpm: f64,
+    /// What it gives at this rpm, past its limit the most it gives at any rpm, W.
+    pub given_w: f64,
+}
+
+/// What the engine has to spare at a condition at which the propeller takes a power, W; `None` without an engine.
 #[must_use]
-pub fn spare(rig: &Rig, at: &Condition, taken_w: f64) -> Option<(f64, f64)> {
+pub fn spare(rig: &Rig, at: &Condition, taken_w: f64) -> Option<Spare> {
     let shaft = rig.shaft.as_ref()?;
-    let (rpm, highest) = (rpm_of(at), highest_rpm(shaft));
-    let given_w = shaft.power_w(rpm.min(highest), &at.air, 1.0);
-    Some((1.0 - rpm / highest, (given_w - taken_w) / taken_w.max(1e-9)))
+    let (rpm, highest_rpm) = (rpm_of(at), highest_rpm(shaft));
+    let here_w = shaft.power_w(rpm.min(highest_rpm), &at.air, 1.0).max(0.0);
+    let given_w = if rpm > highest_rpm { greatest_w(shaft, at, highest_rpm) } else { here_w };
+    let power_share = (here_w - taken_w) / taken_w.max(1e-9);
+    Some(Spare { rpm_share: 1.0 - rpm / highest_rpm, power_share, highest_rpm, given_w })
+}
+
+/// The most power an engine gives up to an rpm, by equal steps, W.
+fn greatest_w(shaft: &Shaft, at: &Condition, highest_rpm: f64) -> f64 {
+    let low = shaft.rpm_range().0;
+    let rpm = |i: u32| low + (highest_rpm - low) * f64::from(i) / f64::from(POWER_STEPS);
+    (0..=POWER_STEPS).map(|i| shaft.power_w(rpm(i), &at.air, 1.0)).fold(0.0, f64::max)
 }
 
 /// What the propeller takes at a condition, W.
@@ -117,7 +140,8 @@ pub fn rpm_of(at: &Condition) -> f64 {
 }
 
 /// The highest propeller rpm the engine allows: its limit or the end of its curve.
-fn highest_rpm(shaft: &Shaft) -> f64 {
+#[must_use]
+pub fn highest_rpm(shaft: &Shaft) -> f64 {
     shaft.limit_rpm().unwrap_or(f64::INFINITY).min(shaft.rpm_range().1)
 }
 

@@ -132,9 +132,19 @@ pub enum Note {
     HeldAtLimitRpm,
     /// Level flight slower than the stall.
     BelowStall,
+    /// The engine would turn faster than its limit rpm, or than its curve or its battery's voltage lets it.
+    PastLimitRpm,
+    /// The propeller takes more power than the engine gives at full throttle.
+    MoreThanEngine,
 }
 
 impl Note {
+    /// Whether it is said of the flight point, not of a place on the blade.
+    #[must_use]
+    pub fn of_the_whole(self) -> bool {
+        matches!(self, Self::HeldAtLimitRpm | Self::BelowStall | Self::PastLimitRpm | Self::MoreThanEngine)
+    }
+
     /// A few plain words.
     #[must_use]
     pub fn words(self) -> &'static str {
@@ -148,6 +158,8 @@ impl Note {
             Self::NoBalance => "no balance found, no load counted",
             Self::NoLoadAtEnd => "at the end of the blade or inside the hub, no load",
             Self::BelowStall => "slower than the stall, the wing does not carry the aeroplane",
+            Self::PastLimitRpm => "past the engine's limit rpm, or past the end of its power curve",
+            Self::MoreThanEngine => "more power than the engine has",
             Self::HeldAtLimitRpm => "throttled back to hold the limit rpm",
         }
     }
@@ -241,7 +253,7 @@ pub struct Meeting {
     pub asked_n: Option<f64>,
     /// Rate of climb `(T − D) V/W` of an aeroplane, lift taken as weight, m/s.
     pub rate_of_climb_m_s: Option<f64>,
-    /// Fuel flow of all engines, kg/h.
+    /// Fuel flow of all engines, kg/h; `None` beyond the engine's power or limit rpm.
     pub fuel_kg_per_h: Option<f64>,
     /// Motor current, A.
     pub motor_current_a: Option<f64>,

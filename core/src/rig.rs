@@ -105,6 +105,8 @@ impl Rig {
             Ok(at) => {
                 let mut result = report::point(&self.rotor, point, &at);
                 result.meeting = fit::meeting(self, &at, &result.figures);
+                let taken_w = result.figures.power_w.unwrap_or(0.0);
+                result.notes.extend(fit::beyond_engine(self, &at, taken_w));
                 result.notes.extend(fit::stalled(self, point, &air).then_some(Note::BelowStall));
                 result
             }

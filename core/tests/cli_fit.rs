@@ -36,6 +36,24 @@ fn the_fit_tells_the_dive_and_what_a_variable_pitch_is_worth() {
 }
 
 #[test]
+fn a_multirotor_is_told_in_its_own_words() {
+    let demo: Value = serde_json::from_str(&out(&run(&["demo", "multirotor"], ""))).unwrap();
+    let told = |mass_kg: f64| {
+        let mut job = demo.clone();
+        job["aircraft"]["mass_kg"] = mass_kg.into();
+        out(&run(&["fit", "-", "--speeds", "12"], &job.to_string()))
+    };
+    let (fit, heavy) = (told(demo["aircraft"]["mass_kg"].as_f64().unwrap()), told(40.0));
+    for words in ["weight N", "Fastest climb straight up", "Longest aloft"] {
+        assert!(fit.contains(words), "{words} in\n{fit}");
+    }
+    assert!(heavy.contains("It cannot hover: full throttle is ") && heavy.contains(" N short of"), "{heavy}");
+    for words in ["drag", "stall", "Ground roll", "ceiling"] {
+        assert!(!fit.contains(words) && !heavy.contains(words), "{words} in\n{heavy}");
+    }
+}
+
+#[test]
 fn the_map_is_told_for_programs() {
     let o = run(&["map", "--demo", DEMO, "--point", "cruise", "--json", "--speeds", "5", "--radii", "4"], "");
     assert_eq!(o.status.code(), Some(0), "{}", err(&o));

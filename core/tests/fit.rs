@@ -3,8 +3,9 @@
 use spokeshave::air::Air;
 use spokeshave::aircraft::drag_n;
 use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, Setting};
-use spokeshave::result::{PointResult, State};
+use spokeshave::result::{Limit, Note, PointResult, State};
 use spokeshave::rig::Rig;
+use spokeshave::shape::{brief, kept};
 
 fn demo(index: usize) -> Job {
     Job::from_json(DEMOS[index].json).unwrap()
@@ -125,4 +126,50 @@ fn turned_blades_are_a_coarser_propeller() {
     let turned = at(&job, Some(30.0), Setting::FullThrottle {});
     assert!(turned.rpm < drawn.rpm);
     near(turned.figures.blade_angle_075_deg, drawn.figures.blade_angle_075_deg.unwrap() + 2.0, 1e-9);
+}
+
+/// The demo's engine may turn at 3300 rpm and gives less than 60 kW anywhere: what is asked beyond that is told, and burns no fuel.
+#[test]
+fn a_setting_beyond_the_engine_is_noted_and_tells_no_fuel() {
+    let beyond = |p: &PointResult, note| p.state == State::Ok && p.notes.contains(&note);
+    let fast = at(&demo(0), Some(40.0), Setting::Rpm { rpm: 3600.0 });
+    assert!(beyond(&fast, Note::PastLimitRpm) && beyond(&fast, Note::MoreThanEngine), "{:?}", fast.notes);
+    assert!(fast.meeting.fuel_kg_per_h.is_none() && fast.figures.power_w.unwrap() > 60_000.0);
+    let strong = at(&demo(0), Some(40.0), Setting::Power { power_w: 62_000.0 });
+    assert!(beyond(&strong, Note::MoreThanEngine) && strong.meeting.fuel_kg_per_h.is_none());
+    let mild = at(&demo(0), Some(40.0), Setting::Rpm { rpm: 2600.0 });
+    assert!(mild.notes.iter().all(|note| !note.of_the_whole()) && mild.meeting.fuel_kg_per_h.unwrap() > 0.0);
+    let full = at(&demo(0), Some(40.0), Setting::FullThrottle {});
+    assert!(full.notes.iter().all(|note| !note.of_the_whole()) && full.meeting.fuel_kg_per_h.unwrap() > 0.0);
+    let mut job = demo(0);
+    job.flight_points[2].setting = Setting::Rpm { rpm: 3600.0 };
+    let rig = Rig::new(&job).unwrap();
+    assert!(brief(&rig, &rig.job.flight_points[2]).endurance_s.is_none());
+}
+
+#[test]
+fn an_empty_tank_lasts_for_no_time_that_is_told() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    piston.fuel_kg = Some(0.0);
+    let marks = Rig::new(&job).unwrap().fit(0, 20).unwrap().envelope.marks;
+    assert!(marks.best_endurance.is_none() && marks.best_range.is_none());
+}
+
+/// Weight by hand: 40 kg at 9.80665 m/s².
+#[test]
+fn a_multirotor_too_heavy_to_hover_is_told_by_how_much() {
+    let mut job = demo(2);
+    let Some(Aircraft::Multirotor(m)) = &mut job.aircraft else { panic!("a multirotor") };
+    m.mass_kg = 40.0;
+    let rig = Rig::new(&job).unwrap();
+    let range = rig.fit(0, 20).unwrap().envelope;
+    let (short, thrust) = (range.hover_short_n().unwrap(), range.standing.as_ref().unwrap().thrust_n);
+    assert!((short + thrust - 40.0 * 9.806_65).abs() < 1e-6, "{short} {thrust}");
+    let power = kept(&rig).into_iter().find(|m| m.limit == Limit::EnginePower).unwrap();
+    let full = range.standing.unwrap().power_w;
+    assert!(power.allowed.unwrap() >= full && power.allowed < power.found, "{power:?} {full}");
+    assert!(power.share < 0.0);
+    assert!(Rig::new(&demo(2)).unwrap().fit(0, 20).unwrap().envelope.hover_short_n().is_none());
+    assert!(Rig::new(&demo(0)).unwrap().fit(0, 20).unwrap().envelope.hover_n().is_none());
 }

@@ -128,7 +128,15 @@ fn range(e: &Envelope, told: &Told) -> Vec<String> {
     of("Longest range", m.best_range, &|v| s.distance.say(v));
     of("Longest aloft", m.best_endurance, &|v| format!("{:.2} h", v / 3600.0));
     if let Some(top) = m.top_speed {
-        said.push(format!("Top speed: {} at {}.", s.speed.say(top.airspeed_m_s), RPM.say(top.rpm)));
+        let what = if e.hover_n().is_some() { "Fastest climb straight up" } else { "Top speed" };
+        said.push(format!("{what}: {} at {}.", s.speed.say(top.airspeed_m_s), RPM.say(top.rpm)));
+    }
+    if let (Some(weight), Some(short)) = (e.hover_n(), e.hover_short_n()) {
+        said.push(format!(
+            "It cannot hover: full throttle is {} short of the weight of {}.",
+            s.force.say(short),
+            s.force.say(weight)
+        ));
     }
     if let Some(t) = crate::fit::take_off(told.rig, e) {
         said.push(format!(

@@ -1,12 +1,15 @@
 //! What engine and aircraft make of a propeller's condition.
 
-use super::rpm_of;
 use super::slipstream::kept_share;
+use super::{highest_rpm, rpm_of};
 use crate::aircraft::{propellers, thrust_asked_n, weight_n};
 use crate::job::Aircraft;
-use crate::result::{Figures, Meeting};
+use crate::result::{Figures, Meeting, Note};
 use crate::rig::Rig;
 use crate::rotor::Condition;
+
+/// Share beyond the engine that counts as such: what is met by a root is not.
+const BEYOND: f64 = 1e-3;
 
 /// The meeting at a condition, from the propeller's figures there.
 #[must_use]
@@ -17,6 +20,18 @@ pub fn meeting(rig: &Rig, at: &Condition, figures: &Figures) -> Meeting {
     m
 }
 
+/// In what a condition at which the propeller takes a power is beyond the engine, W; empty without one.
+#[must_use]
+pub fn beyond_engine(rig: &Rig, at: &Condition, taken_w: f64) -> Vec<Note> {
+    let Some(shaft) = &rig.shaft else { return Vec::new() };
+    let (rpm, highest) = (rpm_of(at), highest_rpm(shaft));
+    let given_w = shaft.power_w(rpm, &at.air, 1.0);
+    let past = rpm > highest * (1.0 + BEYOND);
+    let more = taken_w > given_w.max(0.0) * (1.0 + BEYOND);
+    let notes = [(past, Note::PastLimitRpm), (more, Note::MoreThanEngine)];
+    notes.into_iter().filter_map(|(holds, note)| holds.then_some(note)).collect()
+}
+
 fn add_engine(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
     let (Some(shaft), Some(power)) = (&rig.shaft, figures.power_w) else { return };
     let rpm = rpm_of(at);
@@ -24,6 +39,9 @@ fn add_engine(m: &mut Meeting, rig: &Rig, at: &Condition, figures: &Figures) {
     m.available_power_w = shaft.available_w(rpm, &at.air);
     m.power_share = m.available_power_w.map(|a| power / a);
     let engines = rig.aircraft.as_ref().map_or(1.0, propellers);
+    if !beyond_engine(rig, at, power).is_empty() {
+        return;
+    }
     m.fuel_kg_per_h = shaft.fuel_kg_s(rpm, power, &at.air).map(|f| 3600.0 * f * engines);
     if let Some(e) = shaft.electrics(rpm, power) {
         m.motor_current_a = Some(e.motor_current_a);

@@ -47,6 +47,19 @@ pub struct Envelope {
 }
 
 impl Envelope {
+    /// The weight of a multirotor, N; `None` for other jobs.
+    #[must_use]
+    pub fn hover_n(&self) -> Option<f64> {
+        self.points.first().filter(|p| p.airspeed_m_s == 0.0)?.asked_n
+    }
+
+    /// How much full throttle falls short of holding a multirotor up, all rotors together, N; `None` where it does not.
+    #[must_use]
+    pub fn hover_short_n(&self) -> Option<f64> {
+        let short = self.hover_n()? - self.standing.as_ref()?.thrust_n;
+        (short > 0.0).then_some(short)
+    }
+
     /// First and last speed (m/s) of the range at which full throttle cannot turn the propeller at any rpm of the engine's
     /// power curve; `None` where there is no such speed.
     #[must_use]

@@ -1,7 +1,7 @@
 //! The figures of a flight point that decide between blades, without its stations.
 
 use crate::aircraft::propellers;
-use crate::fit::{self, Answer, Near};
+use crate::fit::{self, Answer, Near, Spare};
 use crate::job::{Figure, FlightPoint, Setting};
 use crate::report;
 use crate::result::{Brief, Compared, Figures, Meeting, State};
@@ -27,16 +27,19 @@ pub fn brief(rig: &Rig, point: &FlightPoint) -> Brief {
 /// A flight point as a search sees it: level flight is told even where the engine does not give it.
 pub(super) struct Look {
     pub(super) brief: Brief,
-    /// What the engine has to spare in level flight: rpm as a share of its limit, power as a share of what is taken.
-    pub(super) spare: Option<(f64, f64)>,
+    /// What the engine has to spare in level flight.
+    pub(super) spare: Option<Spare>,
 }
+
+/// Where level flight has no answer nothing is to spare.
+const NOTHING: Spare = Spare { rpm_share: -1.0, power_share: -1.0, highest_rpm: 0.0, given_w: 0.0 };
 
 pub(super) fn look(rig: &Rig, point: &FlightPoint, near: &mut Near) -> Look {
     let level = point.setting == (Setting::Level {}) && rig.shaft.is_some();
     let answer =
         air_of(point).map_err(|_| State::OutOfReach).and_then(|air| fit::answer(rig, point, air, near));
     match answer {
-        Err(state) => Look { brief: empty(point, state), spare: level.then_some((-1.0, -1.0)) },
+        Err(state) => Look { brief: empty(point, state), spare: level.then_some(NOTHING) },
         Ok(Answer { condition, loads, held }) => {
             let mut brief = told_at(rig, point, &condition, &loads);
             let spare = level.then(|| fit::spare(rig, &condition, brief.power_w.unwrap_or(0.0)));
@@ -57,7 +60,8 @@ fn told_at(rig: &Rig, point: &FlightPoint, at: &Condition, loads: &Loads) -> Bri
     let here = (Some(at.airspeed_m_s), Some(fit::rpm_of(at)));
     let engines = rig.job.aircraft.as_ref().map_or(1.0, propellers);
     let lasts = |w: f64| rig.shaft.as_ref()?.endurance_s(fit::rpm_of(at), w, &at.air, engines);
-    let endurance_s = figures.power_w.filter(|w| *w > 0.0).and_then(lasts);
+    let given = |w: &f64| *w > 0.0 && fit::beyond_engine(rig, at, *w).is_empty();
+    let endurance_s = figures.power_w.filter(given).and_then(lasts);
     Brief { endurance_s, ..told(point, State::Ok, here, &figures, &meeting) }
 }
 

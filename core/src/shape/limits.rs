@@ -75,18 +75,14 @@ fn at_point(limits: &Limits, look: &Look) -> Vec<Margin> {
     let mut all = Vec::new();
     let share = if b.rpm.is_some() { 1.0 } else { -1.0 };
     all.push(Margin { limit: Limit::Answer, flight_point: place(), found: None, allowed: None, share });
-    if let Some((rpm_share, power_share)) = look.spare {
-        let allowed = |found: Option<f64>, by: f64| found.map(|f| f * by);
+    if let Some(spare) = look.spare {
         let engine = [
-            (Limit::EngineRpm, b.rpm, allowed(b.rpm, 1.0 / (1.0 - rpm_share)), rpm_share),
-            (Limit::EnginePower, b.power_w, allowed(b.power_w, 1.0 + power_share), power_share),
+            (Limit::EngineRpm, b.rpm, spare.highest_rpm, spare.rpm_share),
+            (Limit::EnginePower, b.power_w, spare.given_w, spare.power_share),
         ];
-        all.extend(engine.map(|(limit, found, allowed, share)| Margin {
-            limit,
-            flight_point: place(),
-            found,
-            allowed,
-            share,
+        all.extend(engine.map(|(limit, found, allowed, share)| {
+            let allowed = found.map(|_| allowed);
+            Margin { limit, flight_point: place(), found, allowed, share }
         }));
     }
     all.extend(limits.rpm_most.map(|most| at_most(Limit::RpmMost, place(), b.rpm, most)));

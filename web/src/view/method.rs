@@ -156,8 +156,12 @@ fn Outside(props: &OutsideProps) -> Html {
             .filter(|&i| result.stations[i].notes.contains(&note))
             .map(|i| (i + 1).to_string())
             .collect();
-        let place = if at.is_empty() { "between stations".into() } else { format!("at station {}", at.join(", ")) };
-        html! { <li class={(note == Note::NoBalance).then_some("bad")}>{ format!("{} – {place}", super::form::capital(note.words())) }</li> }
+        let place = match at.join(", ") {
+            _ if note.of_the_whole() => String::new(),
+            none if none.is_empty() => " – between stations".into(),
+            some => format!(" – at station {some}"),
+        };
+        html! { <li class={(note == Note::NoBalance).then_some("bad")}>{ format!("{}{place}", super::form::capital(note.words())) }</li> }
     });
     html! {
         <>

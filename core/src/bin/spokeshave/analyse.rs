@@ -167,7 +167,9 @@ fn stations_text(point: &PointResult) -> String {
         "",
     ];
     let rows = point.stations.iter().enumerate().map(|(i, s)| station_row(i, s)).collect();
-    format!("{}\n{}", point.name, table(&header, rows))
+    let whole: Vec<&str> = point.notes.iter().filter(|n| n.of_the_whole()).map(|n| n.words()).collect();
+    let said = if whole.is_empty() { String::new() } else { format!(": {}", whole.join("; ")) };
+    format!("{}{said}\n{}", point.name, table(&header, rows))
 }
 
 fn station_row(i: usize, s: &StationResult) -> Vec<String> {

@@ -25,6 +25,7 @@ fn sentences(props: &LimitsProps) -> Vec<String> {
     let (envelope, units) = (&props.envelope, props.units);
     let speed = |v| with_unit(units, Quantity::Speed, Some(v));
     let mut said = vec![rpm(props)];
+    said.extend(hover(props));
     said.extend(stall(props));
     said.extend(dive(props));
     said.extend(idle(props));
@@ -42,6 +43,16 @@ fn sentences(props: &LimitsProps) -> Vec<String> {
         );
     }
     said
+}
+
+fn hover(props: &LimitsProps) -> Option<String> {
+    let force = |n| with_unit(props.units, Quantity::Force, Some(n));
+    let (weight, short) = (props.envelope.hover_n()?, props.envelope.hover_short_n()?);
+    Some(format!(
+        "It cannot hover: full throttle is {} short of the weight of {}.",
+        force(short),
+        force(weight)
+    ))
 }
 
 fn rpm(props: &LimitsProps) -> String {

@@ -123,7 +123,7 @@ fn Notes(props: &NotesProps) -> Html {
     let words: Vec<&str> = props.notes.iter().map(|n| n.words()).collect();
     html! {
         <p class="verdict-notes">
-            { format!("Worth knowing somewhere on the blade: {}. ", words.join("; ")) }<a href="#method">{ "Where" }</a>
+            { format!("Worth knowing here: {}. ", words.join("; ")) }<a href="#method">{ "Where" }</a>
         </p>
     }
 }

@@ -20,14 +20,12 @@ pub(super) fn limits(fit: &Fit, kept: &[Margin]) -> Vec<String> {
         ));
     }
     if m.top_speed.is_some_and(|t| t.held_at_limit) {
-        said.push(
-            "Top speed is held at the limit rpm: the engine could give more than the propeller may take."
-                .into(),
-        );
+        let what = if fit.envelope.hover_n().is_some() { "The fastest climb" } else { "Top speed" };
+        said.push(format!(
+            "{what} is held at the limit rpm: the engine could give more than the propeller may take."
+        ));
     }
-    if m.top_speed.is_none() {
-        said.push("No level flight at full throttle is as fast as the stall.".into());
-    }
+    said.extend(not_held_up(fit));
     for t in &m.tip_mach_from {
         said.push(format!("From {:.0} km/h on the tip passes Mach {:.2}.", 3.6 * t.airspeed_m_s, t.tip_mach));
     }
@@ -59,6 +57,23 @@ pub(super) fn limits(fit: &Fit, kept: &[Margin]) -> Vec<String> {
             .into(),
     );
     said
+}
+
+/// Why full throttle holds nothing up, where that is so.
+fn not_held_up(fit: &Fit) -> Option<String> {
+    let e = &fit.envelope;
+    if let (Some(weight_n), Some(short_n)) = (e.hover_n(), e.hover_short_n()) {
+        return Some(format!(
+            "It cannot hover: full throttle is {short_n:.0} N short of the weight of {weight_n:.0} N."
+        ));
+    }
+    let speeds = e.speeds.filter(|_| e.marks.top_speed.is_none())?;
+    let words = if speeds.stall_m_s.is_some() {
+        "No level flight at full throttle is as fast as the stall."
+    } else {
+        "Full throttle holds level flight at no speed."
+    };
+    Some(words.into())
 }
 
 /// Speeds between which the engine cannot turn the propeller at any rpm of its power curve.

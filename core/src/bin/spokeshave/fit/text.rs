@@ -17,7 +17,7 @@ pub(super) fn text(fit: &Fit, limits_kept: &[Margin]) -> String {
     let every = fit.envelope.points.len().div_ceil(16).max(1);
     let header = [
         "km/h",
-        "drag N",
+        if fit.envelope.hover_n().is_some() { "weight N" } else { "drag N" },
         "full: rpm",
         "thrust N",
         "power kW",
@@ -36,6 +36,8 @@ pub(super) fn text(fit: &Fit, limits_kept: &[Margin]) -> String {
         + &table(&header, rows)
 }
 
+const VERDICT: [&str; 4] = ["", "value", "km/h", "rpm"];
+
 fn verdict_table(fit: &Fit) -> String {
     let m = &fit.envelope.marks;
     let kmh = |mark: Option<Mark>| figure(mark.map(|m| 3.6 * m.airspeed_m_s), 0);
@@ -46,23 +48,29 @@ fn verdict_table(fit: &Fit) -> String {
     let roll = fit.take_off.map(|t| (t.ground_roll_m, t.distance_to_15_m));
     let plain = |what: &str, value: String| vec![what.to_string(), value, String::new(), String::new()];
     let standing = fit.envelope.standing.as_ref();
+    let standing = vec![
+        "Standing start, thrust N".into(),
+        figure(standing.map(|s| s.thrust_n), 0),
+        "0".into(),
+        figure(standing.map(|s| s.rpm), 0),
+    ];
+    let aloft = of("Longest aloft, h", m.best_endurance, value(m.best_endurance, 3600.0, 2));
+    if fit.envelope.hover_n().is_some() {
+        let climb = of("Fastest climb straight up, thrust N", m.top_speed, value(m.top_speed, 1.0, 0));
+        return table(&VERDICT, vec![standing, climb, aloft]);
+    }
     let rows = vec![
-        vec![
-            "Standing start, thrust N".into(),
-            figure(standing.map(|s| s.thrust_n), 0),
-            "0".into(),
-            figure(standing.map(|s| s.rpm), 0),
-        ],
+        standing,
         plain("Ground roll, m", figure(roll.map(|r| r.0), 0)),
         plain("Distance to 15 m, m", figure(roll.map(|r| r.1), 0)),
         of("Best angle of climb, °", m.best_angle_of_climb, value(m.best_angle_of_climb, 1.0, 1)),
         of("Best rate of climb, m/s", m.best_rate_of_climb, value(m.best_rate_of_climb, 1.0, 2)),
-        of("Longest aloft, h", m.best_endurance, value(m.best_endurance, 3600.0, 2)),
+        aloft,
         of("Longest range, km", m.best_range, value(m.best_range, 1000.0, 0)),
         of("Top speed, thrust N", m.top_speed, value(m.top_speed, 1.0, 0)),
         plain("Service ceiling, m", figure(fit.ceilings.and_then(|c| c.service_m), 0)),
     ];
-    table(&["", "value", "km/h", "rpm"], rows)
+    table(&VERDICT, rows)
 }
 
 fn row(p: &EnvelopePoint) -> Vec<String> {
