@@ -192,3 +192,34 @@ fn wishes_of_the_job_file_are_those_of_the_search() {
         take_off.shaped.unwrap() < take_off.drawn.unwrap() || result.aims[1].shaped < result.aims[1].drawn
     );
 }
+
+/// The demo's power curve begins at 2000 rpm and its engine's limit is 3300: no blade turns slower or faster at full throttle.
+#[test]
+fn limits_that_no_blade_can_keep_are_told_before_one_is_tried() {
+    let rig = demo(0);
+    let refused = |limits: Limits| {
+        let mut tried = 0;
+        let wish = Wish { limits, ..Wish::of(&rig) };
+        let end = search(&rig, &wish, &mut |now| {
+            tried = now.trials;
+            ControlFlow::Continue(())
+        });
+        (end.unwrap_err().to_string(), tried)
+    };
+    let (message, tried) = refused(Limits { rpm_most: Some(1000.0), ..Limits::default() });
+    assert!(
+        message.contains("Standing start: greatest rpm: 2000 rpm where 1000 rpm is the limit"),
+        "{message}"
+    );
+    assert!(
+        message.contains("1000 rpm past the limit") && message.contains("curve begins there"),
+        "{message}"
+    );
+    assert_eq!(tried, 0);
+    let (message, tried) = refused(Limits { standing_rpm_least: Some(3400.0), ..Limits::default() });
+    assert!(message.contains("least rpm standing: 3300 rpm where 3400 rpm is the limit"), "{message}");
+    assert_eq!(tried, 0);
+    let rpm = vec![RpmLimit { flight_point: "Cruise".into(), least: Some(3500.0), most: None }];
+    let (message, _) = refused(Limits { rpm, ..Limits::default() });
+    assert!(message.contains("Cruise: least rpm: 3300 rpm where 3500 rpm"), "{message}");
+}

@@ -33,6 +33,14 @@ pub enum ShapeError {
         /// The limit most in the way, and by how much.
         nearest: String,
     },
+    /// A limit that no blade can keep.
+    #[error("no blade can keep this limit. {limit} {why}")]
+    Impossible {
+        /// The limit, with the nearest any blade can come and by how much that is off.
+        limit: String,
+        /// What is in the way.
+        why: String,
+    },
     /// No flight point has a weight.
     #[error("weights: no flight point counts; at least one needs a weight above 0, and none below 0")]
     NoWeight,

@@ -4,6 +4,7 @@ use std::cell::RefCell;
 
 use super::Wish;
 use super::free::{FREE, shaped};
+use super::possible::check_rpm;
 use crate::fit::Near;
 use crate::job::{Aim, Figure, FlightPoint, Limits, Setting};
 use crate::result::{AimResult, Margin};
@@ -85,6 +86,7 @@ impl Ground {
         };
         let points: Vec<FlightPoint> = rig.job.flight_points.iter().filter(counts).cloned().collect();
         let standing = standing(rig, &limits);
+        check_rpm(rig, &limits, &points, standing.as_ref())?;
         let beam = beam(rig, &limits);
         let near = RefCell::new((vec![Near::default(); points.len()], Near::default()));
         let mut ground = Self {
@@ -190,6 +192,22 @@ fn gain(figure: Figure, drawn: Option<f64>, new: f64) -> f64 {
     let more = (new / drawn.unwrap_or(1.0)).ln();
     let gain = if figure.less_is_better() { -more } else { more };
     if gain.is_finite() { gain.clamp(NO_ANSWER, 3.0) } else { NO_ANSWER }
+}
+
+/// The limit most in the way and by how much; where there is no answer, why, and the broken limits that have a figure. `None`
+/// where all are kept.
+pub(super) fn in_the_way(margins: &[Margin], looks: &[Look]) -> Option<String> {
+    let broken = || margins.iter().filter(|m| m.share < -KEPT);
+    let worst = broken().min_by(|a, b| a.share.total_cmp(&b.share))?;
+    if worst.found.is_some() {
+        return Some(worst.sentence());
+    }
+    let look = looks.iter().find(|l| worst.flight_point.as_ref() == Some(&l.brief.name));
+    let why = look.filter(|l| l.brief.rpm.is_none()).map(|l| l.brief.state.sentence());
+    let others = broken().filter(|m| m.found.is_some()).map(Margin::sentence);
+    let said: Vec<String> =
+        std::iter::once(worst.sentence()).chain(why.map(String::from)).chain(others).collect();
+    Some(said.join(" "))
 }
 
 /// Why a figure tells nothing at a flight point.

@@ -7,6 +7,7 @@
 
 mod free;
 mod ground;
+mod possible;
 mod run;
 
 use std::ops::ControlFlow;
@@ -17,7 +18,7 @@ use crate::job::{Aim, Held, Limits, Propeller};
 use crate::result::Search;
 use crate::rig::Rig;
 use free::{free, shaped, told};
-use ground::{Ground, KEPT};
+use ground::Ground;
 use run::Run;
 
 pub use free::FREE;
@@ -83,9 +84,8 @@ pub fn search(rig: &Rig, wish: &Wish, progress: &mut Listener) -> Result<Shaped<
     let found = shaped(rig, &best.x)?;
     let looks = ground.looks(&found);
     let margins = ground.margins(&found, &looks);
-    let worst = margins.iter().min_by(|a, b| a.share.total_cmp(&b.share));
-    if let Some(m) = worst.filter(|m| m.share < -KEPT) {
-        return Err(ShapeError::NoneWithinLimits { nearest: m.sentence() });
+    if let Some(nearest) = ground::in_the_way(&margins, &looks) {
+        return Err(ShapeError::NoneWithinLimits { nearest });
     }
     let result = Search {
         gain: best.gain.exp_m1(),
