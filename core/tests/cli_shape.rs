@@ -75,11 +75,15 @@ fn a_chart_is_told_for_people_and_for_programs() {
     let asked = ["chart", "--point", "Cruise", "--pitch-mm", "1100..1400:4", "--diameter-mm", "1400..1600:3"];
     let limited = [&asked[..], &["--shaft-height-mm", "1000", "--ground-clearance-mm", "230"]].concat();
     let text = out(&shape(&limited));
-    assert!(text.contains("drawn: pitch") && text.contains('*'), "{text}");
+    assert!(text.starts_with("efficiency at Cruise; drawn: pitch") && text.contains('*'), "{text}");
+    assert!(text.contains("judged at Cruise alone"), "{text}");
     let csv = out(&shape(&[&limited[..], &["--csv"]].concat()));
     assert_eq!(csv.lines().count(), 13, "{csv}");
     assert_eq!(csv.lines().filter(|l| l.ends_with("diameter-most")).count(), 4, "{csv}");
     let json: Value = serde_json::from_str(&out(&shape(&[&asked[..], &["--json"]].concat()))).unwrap();
     assert_eq!(json["cells"].as_array().unwrap().len(), 4);
     assert_eq!(shape(&["chart", "--pitch-mm", "wide"]).status.code(), Some(2));
+    let o = shape(&["chart", "--figure", "nope"]);
+    assert_eq!(o.status.code(), Some(2));
+    assert!(err(&o).contains("--figure: nope; allowed are efficiency, speed, climb"), "{}", err(&o));
 }

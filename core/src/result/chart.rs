@@ -94,7 +94,7 @@ pub struct ChartCell {
     pub figures: Brief,
     /// Rpm standing at full throttle, where a limit asks for it.
     pub standing_rpm: Option<f64>,
-    /// The limits it breaks.
+    /// The limits it breaks; those of rpm and tip Mach number at the chart's flight point alone.
     pub broken: Vec<Limit>,
 }
 

@@ -2,6 +2,7 @@
 
 mod chart;
 mod error;
+mod figures;
 mod least_loss;
 mod search;
 mod twist;
@@ -33,7 +34,7 @@ enum How {
     LeastLoss(least_loss::Args),
     /// Diameter, pitch, twist and chord for the best over several flight points, within limits
     Search(search::Args),
-    /// Any figure over pitch and diameter, with the limits that are broken
+    /// Any figure over pitch and diameter, with the limits broken there; those of rpm and tip at that flight point alone
     Chart(chart::Args),
     /// What an error of angle, chord or thickness costs, station by station
     Error(error::Args),

@@ -96,7 +96,7 @@ pub fn Drawing(props: &DrawingProps) -> Html {
     };
     let title = format!("{} over pitch and diameter", capital(name(chart.figure)));
     let note = format!(
-        "at {}; hatched: a limit is broken. A click keeps that blade beside the drawn one.",
+        "at {}; hatched: a limit is broken, of rpm and tip at this flight point alone. A click keeps that blade beside the drawn one.",
         chart.flight_point
     );
     html! {

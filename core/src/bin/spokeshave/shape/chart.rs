@@ -4,8 +4,9 @@ use spokeshave::result::{ChartCell, Figure, PitchDiameter};
 use spokeshave::rig::Rig;
 use spokeshave::shape::{self, MOST_CHART_STEPS, PitchBy};
 
+use super::figures::{NAMES, Words, figure_named, words};
 use super::no_answer;
-use super::wishes::{LimitArgs, figure_named};
+use super::wishes::LimitArgs;
 use crate::input::{Outcome, Stop, point_index, print, print_csv, print_json};
 use crate::table::{csv_figure, figure, table, word};
 
@@ -38,8 +39,11 @@ pub(crate) struct Args {
 
 pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
     let point = point_index(rig, args.point.as_deref())?;
-    let shown = figure_named(&args.figure).ok_or_else(|| {
-        Stop::bad(format!("--figure: {}; allowed is a figure of a flight point", args.figure))
+    // A take-off has no place in the figures of one flight point.
+    let known = figure_named(&args.figure).filter(|figure| *figure != Figure::TakeOffM);
+    let shown = known.ok_or_else(|| {
+        let names: Vec<&str> = NAMES.into_iter().filter(|name| *name != "take-off").collect();
+        Stop::bad(format!("--figure: {}; allowed are {}", args.figure, names.join(", ")))
     })?;
     let drawn = (rig.rotor.blade.pitch_075_m(0.0), rig.job.propeller.diameter_m);
     let pitches = steps("--pitch-mm", args.pitch_mm.as_deref(), drawn.0, 0.2)?;
@@ -118,31 +122,22 @@ fn text(chart: &PitchDiameter, shown: Figure) -> String {
     let diameters: Vec<String> = chart.diameters_m.iter().map(|d| format!("{:.0}", 1e3 * d)).collect();
     let mut header = vec!["pitch mm \\ diameter mm"];
     header.extend(diameters.iter().map(String::as_str));
+    let Words { name, per, decimals } = words(shown);
     let cell = |cell: &Option<ChartCell>| {
         let Some(cell) = cell else { return "–".to_string() };
         let mark = if cell.broken.is_empty() { "" } else { "*" };
-        figure(shown.of(&cell.figures), decimals(shown)) + mark
+        figure(shown.of(&cell.figures).map(|v| v * per), decimals) + mark
     };
     let row = |(row, pitch): (ndarray::ArrayView1<Option<ChartCell>>, &f64)| {
         std::iter::once(format!("{:.0}", 1e3 * pitch)).chain(row.iter().map(cell)).collect()
     };
     let rows = chart.cells.rows().into_iter().zip(&chart.pitches_m).map(row).collect();
     format!(
-        "{} at {} (SI units); drawn: pitch {:.0} mm, diameter {:.0} mm; * breaks a limit\n\n{}",
-        word(&shown),
+        "{name} at {0}; drawn: pitch {1:.0} mm, diameter {2:.0} mm; * breaks a limit.\n\
+         Limits of rpm and tip Mach number are judged at {0} alone; other flight points may break them.\n\n{3}",
         chart.flight_point,
         1e3 * chart.drawn_m.0,
         1e3 * chart.drawn_m.1,
         table(&header, rows)
     )
-}
-
-fn decimals(shown: Figure) -> usize {
-    match shown {
-        Figure::Efficiency => 4,
-        Figure::TipMach => 3,
-        Figure::AirspeedMS | Figure::RateOfClimbMS => 2,
-        Figure::ThrustN => 1,
-        Figure::Rpm | Figure::PowerW | Figure::EnduranceS | Figure::TakeOffM => 0,
-    }
 }

@@ -1,12 +1,13 @@
 //! `spokeshave shape JOB error`.
 
-use spokeshave::result::{Cost, ErrorCosts, Figure, Tolerance};
+use spokeshave::result::{Cost, ErrorCosts, Tolerance};
 use spokeshave::rig::Rig;
 use spokeshave::shape;
 
+use super::figures::{Words, words};
 use super::no_answer;
 use crate::input::{Outcome, print, print_json};
-use crate::table::{figure, signed, table, word};
+use crate::table::{figure, signed, table};
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
@@ -66,13 +67,10 @@ fn text(e: &ErrorCosts) -> String {
 }
 
 fn row(c: &Cost) -> Vec<String> {
-    let digits = match c.figure {
-        Figure::Efficiency | Figure::TipMach => 5,
-        Figure::AirspeedMS | Figure::RateOfClimbMS => 3,
-        Figure::Rpm | Figure::ThrustN | Figure::PowerW | Figure::EnduranceS | Figure::TakeOffM => 2,
-    };
-    let mut row = vec![c.flight_point.clone(), word(&c.figure), figure(Some(c.drawn), digits)];
-    row.extend(c.per_degree.iter().map(|s| signed(*s, digits)));
-    row.extend([c.band_independent, c.band_worst, c.band_polars].map(|b| figure(Some(b), digits)));
+    let Words { name, per, decimals } = words(c.figure);
+    let digits = decimals + 1;
+    let mut row = vec![c.flight_point.clone(), name.into(), figure(Some(per * c.drawn), digits)];
+    row.extend(c.per_degree.iter().map(|s| signed(s.map(|s| per * s), digits)));
+    row.extend([c.band_independent, c.band_worst, c.band_polars].map(|b| figure(Some(per * b), digits)));
     row
 }

@@ -4,11 +4,12 @@ use std::ops::ControlFlow;
 use std::time::{Duration, Instant};
 
 use indicatif::{ProgressBar, ProgressStyle};
-use spokeshave::job::{Figure, Held};
+use spokeshave::job::Held;
 use spokeshave::result::{AimResult, Margin, Search};
 use spokeshave::rig::Rig;
 use spokeshave::shape::{self, FREE, Progress, Wish};
 
+use super::figures::{Words, words};
 use super::wishes::{LimitArgs, aim, held};
 use super::{Print, compared, told};
 use crate::input::{Outcome, Stop};
@@ -101,17 +102,7 @@ fn text(s: &Search) -> String {
 }
 
 fn row(a: &AimResult) -> Vec<String> {
-    let (name, per, decimals) = match a.figure {
-        Figure::AirspeedMS => ("airspeed km/h", 3.6, 1),
-        Figure::Rpm => ("rpm", 1.0, 0),
-        Figure::ThrustN => ("thrust N", 1.0, 1),
-        Figure::PowerW => ("power kW", 1e-3, 3),
-        Figure::Efficiency => ("efficiency", 1.0, 4),
-        Figure::RateOfClimbMS => ("climb m/s", 1.0, 2),
-        Figure::EnduranceS => ("endurance min", 1.0 / 60.0, 1),
-        Figure::TakeOffM => ("take-off to 15 m, m", 1.0, 0),
-        Figure::TipMach => ("tip Mach number", 1.0, 3),
-    };
+    let Words { name, per, decimals } = words(a.figure);
     let told = |value: Option<f64>| figure(value.map(|v| v * per), decimals);
     vec![a.flight_point.clone(), name.into(), a.weight.to_string(), told(a.drawn), told(a.shaped)]
 }

@@ -2,9 +2,10 @@
 
 use std::str::FromStr;
 
-use spokeshave::job::{Aim, Figure, Held, Limits, RpmLimit, Wishes};
+use spokeshave::job::{Aim, Held, Limits, RpmLimit, Wishes};
 use spokeshave::rig::Rig;
 
+use super::figures::{NAMES, figure_named};
 use crate::input::{Stop, point_index};
 
 /// Limits of the finished propeller; each takes the place of the job file's.
@@ -107,31 +108,11 @@ pub(super) fn aim(rig: &Rig, text: &str) -> Result<Aim, Stop> {
     let (name, weight) = rest.split_once('=').unwrap_or((rest, "1"));
     let index = point_index(rig, Some(point.trim()))?;
     let figure = figure_named(name.trim())
-        .ok_or_else(|| Stop::bad(format!("--aim: {name}; allowed are {}", names().join(", "))))?;
+        .ok_or_else(|| Stop::bad(format!("--aim: {name}; allowed are {}", NAMES.join(", "))))?;
     let weight = weight.trim().parse().map_err(|_| wrong())?;
     let aim = Aim { flight_point: rig.job.flight_points[index].name.clone(), figure, weight };
     checked(rig, &Wishes { aims: vec![aim.clone()], ..Wishes::default() })?;
     Ok(aim)
-}
-
-/// A figure by the name it has in the job file, or that without its unit.
-pub(super) fn figure_named(name: &str) -> Option<Figure> {
-    let lower = name.to_lowercase().replace('-', "_");
-    let whole = serde_json::from_value(serde_json::Value::String(lower.clone())).ok();
-    whole.or(match lower.as_str() {
-        "speed" | "airspeed" => Some(Figure::AirspeedMS),
-        "thrust" => Some(Figure::ThrustN),
-        "power" => Some(Figure::PowerW),
-        "climb" => Some(Figure::RateOfClimbMS),
-        "endurance" => Some(Figure::EnduranceS),
-        "take_off" => Some(Figure::TakeOffM),
-        "noise" => Some(Figure::TipMach),
-        _ => None,
-    })
-}
-
-fn names() -> [&'static str; 8] {
-    ["efficiency", "speed", "climb", "take-off", "endurance", "power", "thrust", "noise"]
 }
 
 /// What stays as drawn.
