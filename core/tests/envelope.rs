@@ -226,6 +226,34 @@ fn at_the_service_ceiling_the_best_climb_is_half_a_metre_per_second() {
     }
 }
 
+/// Slower than the stall nothing climbs: a ceiling comes from the speeds that the wing carries, as fast as they may be.
+#[test]
+fn ceilings_are_those_of_the_speeds_that_are_flown() {
+    let mut stalls = demo(0);
+    let Some(Aircraft::Aeroplane(a)) = &mut stalls.aircraft else { panic!("an aeroplane") };
+    a.cl_max = Some(0.25);
+    for job in [demo(0), demo(1), stalls] {
+        let rig = Rig::new(&job).unwrap();
+        let found = ceilings(&rig, 0.0).unwrap();
+        let best = |altitude_m: f64| {
+            let range = envelope(&rig, &FlightPoint { altitude_m, ..full(None) }, 160, &[]).unwrap();
+            let stall = range.speeds.unwrap().stall_m_s.unwrap_or(0.0);
+            let flown = range.points.iter().filter(|p| p.airspeed_m_s >= stall);
+            let climb = flown.filter_map(|p| p.full.as_ref()?.rate_of_climb_m_s).fold(f64::MIN, f64::max);
+            // The range's first speed may lie somewhat above the stall.
+            let slowest = FlightPoint { altitude_m, ..full(Some(stall)) };
+            let slowest = Job { flight_points: vec![slowest], ..job.clone() };
+            let there = Rig::new(&slowest).unwrap().point(0).unwrap().meeting.rate_of_climb_m_s;
+            climb.max(there.unwrap_or(f64::MIN))
+        };
+        let (got, expected) = (found.sea_level_climb_m_s.unwrap(), best(0.0));
+        assert!((got - expected).abs() < 0.03 * expected, "{}: {got} {expected}", job.title);
+        if let Some(service) = found.service_m {
+            assert!((best(service) - 0.5).abs() < 0.03, "{}: {} at {service}", job.title, best(service));
+        }
+    }
+}
+
 #[test]
 fn the_map_of_matched_points_is_the_envelope_at_each_height() {
     let rig = Rig::new(&demo(0)).unwrap();

@@ -1,9 +1,13 @@
 //! Ceilings: the heights at which the best rate of climb at full throttle falls to 0.5 m/s and to nothing.
 
+use std::ops::Range;
+
 use roots::{SimpleConvergency, find_root_brent};
 
 use super::Solver;
+use super::marks::vertex;
 use super::slipstream::kept_share;
+use super::top_speed::FASTEST_MACH;
 use super::trail::Trail;
 use crate::air::{Air, HIGHEST_M};
 use crate::aircraft::{drag_n, propellers, speeds, weight_n};
@@ -14,14 +18,16 @@ use crate::rotor::Condition;
 
 /// Rate of climb at the service ceiling, m/s: common practice.
 const SERVICE_M_S: f64 = 0.5;
-/// Speeds looked at, over the speed of least power.
+/// Slowest speed looked at over that of least power, where no stall is known.
 const SLOWEST: f64 = 0.8;
+/// How far one speed looked at lies above the one before, as a share.
 const STEP: f64 = 0.1;
-const SPEEDS: u32 = 14;
+/// Speeds in a row without gain after which faster ones are not looked at.
+const MOST_VAIN: u32 = 3;
 const CONVERGED_M: f64 = 0.5;
 
 /// The ceilings of an aeroplane at a temperature offset, as pressure altitudes between sea level and the end of the
-/// atmosphere's table. `None` for other jobs.
+/// atmosphere's table, by the best climb from the stall on. `None` for other jobs.
 #[must_use]
 pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return None };
@@ -42,38 +48,43 @@ pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     Some(Ceilings { service_m: spare(SERVICE_M_S), absolute_m: spare(0.0), sea_level_climb_m_s: lowest })
 }
 
-/// The best rate of climb at full throttle at a height, held to the limit rpm; `None` where there is no answer at any
-/// speed.
+/// The best rate of climb at full throttle at a height, from the stall on, held to the limit rpm; `None` where there is no
+/// answer at any speed.
 fn best_climb_m_s(rig: &Rig, a: &Aeroplane, altitude_m: f64, isa_offset_k: f64) -> Option<f64> {
     let air = Air::standard(altitude_m, isa_offset_k).ok()?;
     let solver = Solver::new(rig);
     let aircraft = Aircraft::Aeroplane(a.clone());
-    let slow = speeds(a, &air).least_power_m_s;
     let kept = kept_share(rig);
-    let mut trail = Trail::default();
-    let mut climb = |v: f64| {
+    let climb = |v: f64, trail: &mut Trail| {
         let at = Condition { air, airspeed_m_s: v, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
-        let full = solver.full(&at, &mut trail).ok()?;
+        let full = solver.full(&at, trail).ok()?;
         let thrust = full.loads.thrust_n * propellers(&aircraft) * kept;
-        Some((v, (thrust - drag_n(a, &air, v)?) * v / weight_n(&aircraft)))
+        Some((thrust - drag_n(a, &air, v)?) * v / weight_n(&aircraft))
     };
-    let mut before: [Option<(f64, f64)>; 2] = [None, None];
-    for i in 0..SPEEDS {
-        let here = climb(slow * (SLOWEST + STEP * f64::from(i)));
-        if let (Some(b), Some(c)) = (before[1], here)
-            && c.1 < b.1
-        {
-            return Some(before[0].map_or(b.1, |a| top_of(a, b, c)));
-        }
-        before = if here.is_some() { [before[1], here] } else { before };
-    }
-    before[1].map(|b| b.1)
+    let known = speeds(a, &air);
+    let slowest = known.stall_m_s.unwrap_or(SLOWEST * known.least_power_m_s);
+    let mut trail = Trail::default();
+    let seen = uphill(slowest..FASTEST_MACH * air.sound_speed_m_s, |v| Some((v, climb(v, &mut trail)?)));
+    let best = (0..seen.len()).max_by(|a, b| seen[*a].1.total_cmp(&seen[*b].1))?;
+    let (top, before) = (seen[best], best.checked_sub(1).map(|i| seen[i]));
+    let between = before.zip(seen.get(best + 1)).map(|(a, c)| vertex(a, top, *c));
+    let refined = between.and_then(|v| climb(v, &mut Trail::default()));
+    Some(refined.map_or(top.1, |climb| climb.max(top.1)))
 }
 
-/// The value at the top of the parabola through three points.
-fn top_of(a: (f64, f64), b: (f64, f64), c: (f64, f64)) -> f64 {
-    let v = super::marks::vertex(a, b, c);
-    let (left, right) = ((b.1 - a.1) / (b.0 - a.0), (c.1 - b.1) / (c.0 - b.0));
-    let bend = (right - left) / (c.0 - a.0);
-    a.1 + (v - a.0) * (left + (v - b.0) * bend)
+/// Values at speeds from the slowest on, up to where several in a row gain nothing; those without an answer are left out.
+fn uphill(speeds_m_s: Range<f64>, mut value: impl FnMut(f64) -> Option<(f64, f64)>) -> Vec<(f64, f64)> {
+    let (mut seen, mut most, mut vain) = (Vec::new(), f64::NEG_INFINITY, 0);
+    let mut v = speeds_m_s.start;
+    while v < speeds_m_s.end && vain < MOST_VAIN {
+        let here = value(v);
+        match here.filter(|here| here.1 > most) {
+            Some(higher) => (most, vain) = (higher.1, 0),
+            None if !seen.is_empty() => vain += 1,
+            None => {}
+        }
+        seen.extend(here);
+        v *= 1.0 + STEP;
+    }
+    seen
 }
