@@ -2,7 +2,8 @@
 
 use spokeshave::drawn::{measured_by, with_station};
 use spokeshave::job::{
-    Aim, AngleReference, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting, most_governed_rpm,
+    Aim, AngleReference, Flange, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting,
+    most_governed_rpm,
 };
 
 use super::notice::in_words;
@@ -11,6 +12,7 @@ use super::wishes::some;
 /// A blade needs an inner and an outer station.
 pub const FEWEST_STATIONS: usize = 2;
 
+use super::machine::making::change;
 use super::machine::{AircraftChoice, EngineChoice, WoodChoice};
 use super::readings::{CarvedChoice, LogbookChoice};
 
@@ -59,6 +61,8 @@ pub enum Choice {
     Hold(Held, bool),
     /// Something of the wood.
     Wood(WoodChoice),
+    /// The flange the hub is drilled for; none for the pattern of the job's own hub.
+    Flange(Option<Flange>),
     /// Something of the carved blades.
     Carved(CarvedChoice),
     /// Something of the logbook.
@@ -211,6 +215,7 @@ impl Choice {
             Self::Aims(_) => "what counts in a search".into(),
             Self::Hold(..) => "what a search leaves as drawn".into(),
             Self::Wood(choice) => choice.name(),
+            Self::Flange(_) => "flange".into(),
             Self::Carved(choice) => choice.name(),
             Self::Logbook(choice) => choice.name(),
         }
@@ -270,6 +275,7 @@ impl Choice {
                 held.extend(on.then_some(*what));
             }
             Self::Wood(choice) => choice.apply(&mut next),
+            Self::Flange(to) => change(&mut next, |making| making.flange = *to),
             Self::Carved(choice) => choice.apply(&mut next),
             Self::Logbook(choice) => choice.apply(&mut next),
         }

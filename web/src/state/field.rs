@@ -3,7 +3,7 @@
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
 
-use super::machine::{AircraftFigure, EngineFigure, WoodFigure};
+use super::machine::{AircraftFigure, EngineFigure, MakingFigure, WoodFigure};
 use super::measure::{Measure, write_station};
 use super::point_figure::PointFigure;
 use super::readings::{BladeFigure, LogFigure};
@@ -47,6 +47,8 @@ pub enum Field {
     PointRpm(usize, RpmBound),
     /// A figure of the wood.
     Wood(WoodFigure),
+    /// A figure of how the blade is made.
+    Making(MakingFigure),
     /// A figure measured on a blade at a station.
     Reading(usize, usize, BladeFigure),
     /// A figure of a reading of the logbook.
@@ -79,6 +81,7 @@ impl Field {
             Self::Engine(figure) => figure.quantity(),
             Self::Limit(figure) => figure.quantity(),
             Self::Wood(figure) => figure.quantity(),
+            Self::Making(figure) => figure.quantity(),
             Self::Reading(.., figure) => figure.quantity(),
             Self::Log(_, figure) => figure.quantity(),
         }
@@ -105,6 +108,7 @@ impl Field {
             Self::Engine(figure) => figure.name(),
             Self::Limit(figure) => figure.name().into(),
             Self::Wood(figure) => figure.name().into(),
+            Self::Making(figure) => figure.name().into(),
             Self::Reading(blade, station, figure) => {
                 format!("{} of blade {} at station {}", figure.name(), blade + 1, station + 1)
             }
@@ -133,6 +137,7 @@ impl Field {
             Self::Limit(figure) => figure.path(),
             Self::PointRpm(i, bound) => bound.path(job, i),
             Self::Wood(figure) => figure.path(),
+            Self::Making(figure) => figure.path(),
             Self::Reading(blade, station, figure) => {
                 let i = BladeFigure::index(job, blade, station);
                 format!("carved.blades[{blade}].readings[{i}].{}", figure.key())
@@ -162,6 +167,7 @@ impl Field {
             (Self::Limit(figure), _) => figure.value(job),
             (Self::PointRpm(i, bound), _) => bound.value(job, i),
             (Self::Wood(figure), _) => figure.value(job),
+            (Self::Making(figure), _) => figure.value(job),
             (Self::Reading(blade, station, figure), _) => figure.value(job, blade, station),
             (Self::Log(i, figure), _) => figure.value(job, i),
             _ => None,
@@ -224,6 +230,7 @@ impl Field {
             (Self::Limit(figure), _) => figure.write(job, value),
             (Self::PointRpm(i, bound), _) => return bound.write(job, i, Some(value)),
             (Self::Wood(figure), _) => return figure.write(job, value),
+            (Self::Making(figure), _) => figure.write(job, Some(value)),
             (Self::Reading(blade, station, figure), _) => return figure.write(job, blade, station, value),
             (Self::Log(i, figure), _) => return figure.write(job, i, value),
             _ => return false,
@@ -249,6 +256,10 @@ impl Field {
             }
             Self::PointRpm(i, bound) => bound.write(job, i, None),
             Self::Wood(figure) => figure.clear(job),
+            Self::Making(figure) => {
+                figure.write(job, None);
+                true
+            }
             Self::Reading(blade, station, figure) => figure.clear(job, blade, station),
             Self::Log(i, figure) => figure.clear(job, i),
             _ => false,

@@ -37,7 +37,7 @@ pub use field::Field;
 pub use history::History;
 pub use machine::{
     AircraftChoice, AircraftFigure, AircraftKind, AltitudeKind, DragBy, EngineChoice, EngineFigure,
-    EngineKind, FuelBy, WoodChoice, WoodFigure, species_of, wood_of,
+    EngineKind, FuelBy, MakingFigure, WoodChoice, WoodFigure, species_of, wood_of,
 };
 pub use measure::Measure;
 pub use notice::Notice;

@@ -33,6 +33,30 @@ fn a_job_without_wood_shows_the_usual_one_and_takes_one_when_it_is_changed() {
 }
 
 #[test]
+fn how_the_blade_is_made_is_typed_and_taken_out_again() {
+    let mut job = Job::clone(State::started(None, None).job());
+    job.bench = None;
+    let state = State::started(Some(&job.to_json()), None);
+    let stacking = Field::Making(MakingFigure::Stacking);
+    assert_eq!(shown_text(state.job(), &[], state.units, stacking), "");
+    let read = typed(&state, stacking, "25");
+    assert_eq!(read.job().bench.as_ref().unwrap().stacking_fraction, Some(0.25));
+    assert_eq!(shown_text(read.job(), &[], read.units, stacking), "25");
+    let refused = typed(&read, stacking, "125");
+    assert_eq!(refused.job(), read.job());
+    assert!(refused.drafts[&stacking].message.as_ref().unwrap().contains("100"));
+    let flange = |state: &State, to| state.after(Action::Choose(Choice::Flange(to), Running::default()));
+    let both = flange(&read, Some(spokeshave::job::Flange::Sae2));
+    assert_eq!(both.job().check(), vec![]);
+    assert!(typed(&flange(&both, None), stacking, "").job().bench.is_none());
+    for figure in MakingFigure::ALL.into_iter().filter(|f| *f != MakingFigure::Stacking) {
+        let read = typed(&state, Field::Making(figure), "12");
+        assert_eq!(figure.value(read.job()), Some(0.012), "{}", figure.name());
+        assert!(read.job().to_json().contains(figure.path().trim_start_matches("bench.")));
+    }
+}
+
+#[test]
 fn a_hub_to_start_from_is_allowed_in_every_example_and_typed_back_unchanged() {
     for demo in 0..DEMOS.len() {
         let state = chosen(&State::started(None, None).after(Action::Demo(demo)), WoodChoice::Hub(true));

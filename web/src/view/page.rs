@@ -26,7 +26,7 @@ use super::sections::{self, Sections};
 use super::shape::{self, ShapePanel};
 use super::steps::Steps;
 use super::verdict::{Against, Verdict};
-use super::workshop::Workshop;
+use super::workshop::{self, Workshop};
 use super::{Seen, caution, use_act};
 use crate::app::{Later, Now};
 use crate::chart::hatch::Hatches;
@@ -135,7 +135,7 @@ fn Panels(props: &PageProps) -> Html {
                 result={bench::in_a_line(state, later.strength.as_deref())}>
                 <BenchPanel state={state.part(bench::same_bench)} strength={later.strength.clone()} />
             </Panel>
-            <Workshop number={10} rig={later.rig.clone()} unit={state.units.length} />
+            <Workshop number={10} rig={later.rig.clone()} state={state.part(workshop::same_making)} />
             <Panel id="carved" number={11} title="As carved" open=false onunfold={act.on(|open| Action::Unfold(Part::Carved, open))}
                 result={carved::in_a_line(state, later.carved.as_deref())}>
                 <CarvedPanel state={state.part(carved::same_carved)} found={later.carved.clone()} rig={later.rig.clone()} />

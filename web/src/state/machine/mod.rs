@@ -3,12 +3,14 @@
 pub mod aircraft;
 pub mod engine;
 pub mod engine_choice;
+pub mod making;
 mod place;
 pub mod wood;
 
 pub use aircraft::{AircraftChoice, AircraftFigure, AircraftKind, DragBy};
 pub use engine::EngineFigure;
 pub use engine_choice::{AltitudeKind, EngineChoice, EngineKind, FuelBy};
+pub use making::MakingFigure;
 pub use wood::{WoodChoice, WoodFigure, species_of, wood_of};
 
 use spokeshave::job::{DEMOS, Job};

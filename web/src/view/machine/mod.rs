@@ -28,7 +28,7 @@ fn optional(state: &Seen, field: Field) -> Html {
 }
 
 /// The same with what holds in its absence.
-fn hinted(state: &Seen, field: Field, hint: &'static str) -> Html {
+pub(super) fn hinted(state: &Seen, field: Field, hint: &'static str) -> Html {
     let label = capital(&field.name(state.job()));
     html! { <Labelled shown={Shown::of(state, &[], field)} {label} {hint} /> }
 }

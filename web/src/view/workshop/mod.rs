@@ -1,6 +1,7 @@
 //! From the blade to the bench: the solid turning, the blank in three views, every sheet of paper, files to take away.
 
 pub(super) mod files;
+mod form;
 mod look;
 mod print;
 pub(super) mod sheets;
@@ -11,10 +12,12 @@ use std::rc::Rc;
 use spokeshave::bench::{Bench, BenchError, Paper, Unit};
 use yew::prelude::*;
 
-use super::{caution, panel::Panel};
+use super::{Seen, caution, panel::Panel};
 use crate::app::RigRef;
 use crate::units::LengthUnit;
 use files::Files;
+use form::MakingForm;
+pub use form::same_making;
 use look::Views;
 use sheets::Sheets;
 use turning::Turning;
@@ -26,8 +29,8 @@ pub struct WorkshopProps {
     pub number: usize,
     /// The job made ready; may be a frame old.
     pub rig: Option<RigRef>,
-    /// Unit of the lengths written on paper.
-    pub unit: LengthUnit,
+    /// The state: how the blade is made, and the unit of the lengths written on paper.
+    pub state: Seen,
 }
 
 /// A blade ready for the bench, compared by identity.
@@ -55,10 +58,11 @@ pub fn Workshop(props: &WorkshopProps) -> Html {
     html! {
         <Panel id="paper" number={props.number} title="Paper and files" open={false} {onunfold}
             result="templates, blank, bench heights, hub, job card, full size; the solid; STL, DXF, CSV">
+            if *open { <MakingForm state={props.state.clone()} /> }
             { match &*made {
                 None => Html::default(),
                 Some(Err(why)) => refused(why),
-                Some(Ok(made)) => html! { <Shown made={made.clone()} unit={props.unit} /> },
+                Some(Ok(made)) => html! { <Shown made={made.clone()} unit={props.state.units.length} /> },
             } }
         </Panel>
     }
