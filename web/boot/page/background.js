@@ -19,8 +19,7 @@
   // Starts a task; `hear` gets (kind, text) until it ends with "fault" or the task's own last word. Returns the worker,
   // whose terminate() calls it off, or null where the browser refuses one.
   page.background = function (task, text, hear) {
-    var glue = document.getElementById("page-glue").textContent;
-    var blob = new Blob([glue, "\n(", String(inside), ")();"], { type: "text/javascript" });
+    var blob = new Blob([page.glue, "\n(", String(inside), ")();"], { type: "text/javascript" });
     var url = URL.createObjectURL(blob);
     var worker;
     try {

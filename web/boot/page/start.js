@@ -29,8 +29,19 @@
       .then(function () { return page_opener.open(document.getElementById("page-engine").textContent); });
   }
 
+  // The JavaScript side of the large module, run as a script of the page; kept for workers.
+  function runGlue() {
+    return gunzip(bytesOf("page-glue")).then(function (bytes) {
+      var script = document.createElement("script");
+      page.glue = script.textContent = new TextDecoder().decode(bytes);
+      document.head.appendChild(script);
+      script.remove();
+    });
+  }
+
   function start() {
-    unpack()
+    runGlue()
+      .then(unpack)
       .then(function (bytes) { return WebAssembly.compile(bytes); })
       .then(function (module) {
         page.module = module; // a worker gets it by message

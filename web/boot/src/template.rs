@@ -18,7 +18,7 @@ pub struct Parts<'a> {
     pub opener_glue: &'a str,
     /// The WebAssembly module, LZMA in base 85.
     pub engine: &'a str,
-    /// The JavaScript side of the WebAssembly module.
+    /// The JavaScript side of the WebAssembly module, gzip in base64.
     pub glue: &'a str,
     /// The scripts that start the page.
     pub boot: &'a str,
@@ -52,7 +52,7 @@ impl Parts<'_> {
             "opener" => self.opener.to_owned(),
             "opener-glue" => script_text(self.opener_glue),
             "engine" => self.engine.to_owned(),
-            "glue" => script_text(self.glue),
+            "glue" => self.glue.to_owned(),
             "boot" => script_text(self.boot),
             _ => String::new(),
         }))

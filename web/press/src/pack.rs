@@ -24,6 +24,7 @@ pub(crate) fn pack(modules: &Modules, style: &str) -> Result<Packed> {
     // A script node must not hold `<` before some other letters; the opener puts it back.
     let engine = base85::encode(&lzma(&wasm)?).replace('<', ",");
     let opener = BASE64_STANDARD.encode(gzip(&opener)?);
+    let glue = BASE64_STANDARD.encode(gzip(glue.as_bytes())?);
     let boot = BOOT_SCRIPTS.concat();
     let parts = Parts {
         style,
