@@ -89,6 +89,14 @@ pub fn stalled(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
     point.setting == Setting::Level {} && stall.is_some_and(|stall| point.airspeed_m_s.unwrap_or(0.0) < stall)
 }
 
+/// Whether a flight point has an aeroplane fly slower than its stall, whatever the setting; standing still is no flight.
+#[must_use]
+pub fn slower_than_stall(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
+    let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return false };
+    let flown = point.airspeed_m_s.filter(|v| *v > 0.0);
+    flown.zip(speeds(a, air).stall_m_s).is_some_and(|(v, stall)| v < stall)
+}
+
 /// The condition at which the engine at a throttle setting turns the propeller, at the speed and air of `at`.
 ///
 /// # Errors

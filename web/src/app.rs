@@ -17,7 +17,7 @@ use crate::effect::remembered::Remembered;
 use crate::effect::{file, keys, theme};
 use crate::later::{Plan, Work};
 use crate::results::{CarvedFound, Offered, Results, Sheet};
-use crate::state::{Action, State};
+use crate::state::{Action, State, Variants};
 use crate::view::page::Page;
 use crate::{keep, view};
 
@@ -34,7 +34,8 @@ impl Reducible for Store {
 
 fn started() -> Store {
     let kept = keep::at_start();
-    let state = State::started(kept.as_deref(), keep::in_file().as_deref());
+    let mut state = State::started(kept.as_deref(), keep::in_file().as_deref());
+    state.variants = keep::beside().map_or_else(Variants::default, |text| Variants::from_text(&text));
     if kept.is_some() && state.notice.is_some() {
         keep::set_aside();
     }
@@ -205,6 +206,7 @@ pub fn App() -> Html {
     use_drops(&act);
     use_keys(&act, !store.0.drafts.is_empty());
     use_effect_with(Remembered::of(&store.0), |remembered| remembered.write());
+    use_effect_with(store.0.variants.clone(), |variants| keep::keep_beside(&variants.to_text()));
     use_effect_with(store.0.theme, |picked| theme::show(*picked));
     use_effect_with(store.0.job().title.clone(), |title| theme::title(title));
     html! {

@@ -11,6 +11,10 @@ extern "C" {
     fn job_at_start() -> Option<String>;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = inFile)]
     fn job_in_file() -> Option<String>;
+    #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = beside)]
+    fn kept_beside() -> Option<String>;
+    #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = putBeside)]
+    fn put_beside(json: &str);
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = before)]
     fn keep_before(json: &str) -> bool;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = after)]
@@ -32,6 +36,17 @@ pub fn at_start() -> Option<String> {
 #[must_use]
 pub fn in_file() -> Option<String> {
     job_in_file()
+}
+
+/// The blades kept beside the drawn one in this browser, as JSON.
+#[must_use]
+pub fn beside() -> Option<String> {
+    kept_beside()
+}
+
+/// Keeps the blades beside the drawn one, as far as the browser's storage takes them; an empty text takes them out.
+pub fn keep_beside(json: &str) {
+    put_beside(json);
 }
 
 /// Keeps the job; call before working it out, so that a crash finds it kept. Marks the work as begun:

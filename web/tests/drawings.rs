@@ -257,7 +257,7 @@ fn shapes_are_drawn_for_every_example_and_flight_point() {
             text.contains("For each degree of blade angle") && text.contains("Errors apart"),
             "{shown:?}"
         );
-        let kept = text.contains("a twisted one") && text.contains("Use this blade");
+        let kept = text.contains("a twisted one") && text.contains("Use a twisted one");
         assert!(kept || text.contains("No other blade is kept yet"), "{shown:?}");
     }
 }

@@ -10,6 +10,7 @@
   // Two places by turns, so that a write that is cut off leaves the one before.
   var PLACES = ["spokeshave.1.job." + mark + ".0", "spokeshave.1.job." + mark + ".1"];
   var ASIDE = "spokeshave.1.aside." + mark;
+  var BESIDE = "spokeshave.1.beside." + mark;
   var AT_WORK = "spokeshave.1.at-work." + mark;
   var latest = null;
 
@@ -71,6 +72,9 @@
       write(AT_WORK, "1");
       return kept;
     },
+    // Blades beside the drawn one, as JSON; kept here and not in the job.
+    putBeside: function (json) { return json ? write(BESIDE, json) : (remove(BESIDE), true); },
+    beside: function () { return read(BESIDE); },
     // Call when the job has been worked out and shown.
     after: function () { if (!page.stopped) { remove(AT_WORK); } },
     // The page has stopped over this job: the next start asks before it tries again.

@@ -2,13 +2,14 @@
 
 use std::rc::Rc;
 
+use serde::{Deserialize, Serialize};
 use spokeshave::job::{Job, Propeller};
 
 /// Most blades kept; the oldest goes.
 const MOST: usize = 8;
 
 /// A blade beside the drawn one.
-#[derive(Clone, Debug, PartialEq)]
+#[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
 pub struct Variant {
     /// What it is, used once.
     pub name: String,
@@ -49,6 +50,21 @@ pub struct Variants {
 }
 
 impl Variants {
+    /// As JSON, to be kept; nothing where there is none.
+    #[must_use]
+    pub fn to_text(&self) -> String {
+        let all: Vec<&Variant> = self.all.iter().map(Rc::as_ref).collect();
+        if all.is_empty() { String::new() } else { serde_json::to_string(&all).unwrap_or_default() }
+    }
+
+    /// From what was kept; what cannot be read is none.
+    #[must_use]
+    pub fn from_text(text: &str) -> Self {
+        let mut all: Vec<Variant> = serde_json::from_str(text).unwrap_or_default();
+        all.truncate(MOST);
+        Self { all: all.into_iter().map(Rc::new).collect(), compared: None }
+    }
+
     /// The one compared.
     #[must_use]
     pub fn compared(&self) -> Option<&Rc<Variant>> {
@@ -76,5 +92,21 @@ impl Variants {
             self.all.remove(i);
             self.compared = self.compared.filter(|c| *c != i).map(|c| if c > i { c - 1 } else { c });
         }
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use spokeshave::job::DEMOS;
+
+    #[test]
+    fn what_is_kept_comes_back_and_nonsense_is_none() {
+        let propeller = Job::from_json(DEMOS[0].json).unwrap().propeller;
+        let mut variants = Variants::default();
+        assert_eq!(variants.to_text(), "");
+        variants.keep(Variant { name: "Search 1".into(), propeller, said: vec!["a word".into()] });
+        assert_eq!(Variants::from_text(&variants.to_text()).all, variants.all);
+        assert_eq!(Variants::from_text("[{\"name\": 3}]"), Variants::default());
     }
 }

@@ -5,6 +5,9 @@ use crate::chart::axis::{most_on, placed};
 use crate::chart::linear::Linear;
 use crate::chart::ticks::widened;
 
+/// Room above a limit for what is hatched beyond it.
+const HEADROOM: f64 = 1.03;
+
 /// Room above the frame for the upper axis's words, and under it for figures and words.
 const HEAD: f64 = 22.0;
 const FOOT: f64 = 36.0;
@@ -30,7 +33,9 @@ impl Layout {
         let along = || props.series.iter().flat_map(|s| s.points.iter().map(|p| p[0]));
         let up = || {
             let series = props.series.iter().flat_map(|s| s.points.iter().map(|p| p[1]));
-            series.chain(props.limits.iter().map(|l| l.y)).chain(props.points.iter().map(|p| p.at[1]))
+            series
+                .chain(props.limits.iter().map(|l| if l.hatched { HEADROOM * l.y } else { l.y }))
+                .chain(props.points.iter().map(|p| p.at[1]))
         };
         let x_span = span(&props.x, along(), false);
         let y = Linear::new(span(&props.y, up(), true), (low, top));

@@ -77,10 +77,10 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
                 <thead><tr>
                     <th scope="col">{ "Blade" }</th><th scope="col">{ "Diameter" }</th><th scope="col">{ "Pitch" }</th>
                     <th scope="col">{ "Margin of strength" }<small>{ "of the wood named" }</small></th>
-                    { for heads }<th scope="col"><span class="unseen">{ "What to do" }</span></th>
+                    { for heads }
                 </tr></thead>
                 <tbody>
-                    <tr><th scope="row">{ "as drawn" }</th>{ figures(&drawn, &aims, None, state.units) }<td></td></tr>
+                    <tr><th scope="row">{ "as drawn" }</th>{ figures(&drawn, &aims, None, state.units) }</tr>
                     { for rows }
                 </tbody>
             </table>
@@ -135,17 +135,16 @@ fn BladeRow(props: &BladeRowProps) -> Html {
     let name = &props.variant.name;
     html! {
         <tr class={classes!(compared.then_some("selected"))}>
-            <th scope="row">{ name }</th>
+            <th scope="row">{ name }<div class="row-acts">
+                <button type="button" class="act" aria-pressed={if compared { "true" } else { "false" }} aria-label={format!("Compare {name}")}
+                    onclick={send(Beside::Compare((!compared).then_some(i)))}>{ "Compare" }</button>
+                <button type="button" class="act" aria-label={format!("Use {name}")} onclick={send(Beside::Use(i))}>{ "Use" }</button>
+                <button type="button" class="act" aria-label={format!("Remove {name}")} onclick={send(Beside::Drop(i))}>{ "Remove" }</button>
+            </div></th>
             { match &*row {
                 Some(row) => figures(row, &props.aims, Some(&props.drawn), props.units),
                 None => html! { <td colspan={(props.aims.len() + 3).to_string()}>{ "not allowed in the job as it stands now" }</td> },
             } }
-            <td><div class="row-acts">
-                <button type="button" class="act" aria-pressed={if compared { "true" } else { "false" }} aria-label={format!("Compare {name}")}
-                    onclick={send(Beside::Compare((!compared).then_some(i)))}>{ "Compare" }</button>
-                <button type="button" class="act" aria-label={format!("Use {name}")} onclick={send(Beside::Use(i))}>{ "Use this blade" }</button>
-                <button type="button" class="act" aria-label={format!("Remove {name}")} onclick={send(Beside::Drop(i))}>{ "Remove" }</button>
-            </div></td>
         </tr>
     }
 }
