@@ -156,7 +156,7 @@ fn flown(job: &Job, factors: &Factors) -> Option<(Rig, bool)> {
 fn titles(electric: bool) -> [&'static str; COUNT] {
     let (power, consumption) =
         if electric { ("Motor power", "Current for a power") } else { ("Engine power", "Fuel for a power") };
-    [power, "Drag area, without lift", "Power to turn the propeller", consumption]
+    [power, "Drag area without lift", "Power to turn the propeller", consumption]
 }
 
 fn factors_found(found: &Found, widths: &[f64; COUNT], titles: [&'static str; COUNT]) -> Vec<FactorFound> {
