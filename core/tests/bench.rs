@@ -451,22 +451,24 @@ fn rows_of(sheet: &Sheet) -> Vec<Vec<String>> {
     rows.map(|row| row.iter().map(|t| t.words.clone()).collect()).collect()
 }
 
-/// The demo with readings of its first blade alone, 0.6 degrees coarse and left full, at all but the last two stations.
+/// The demo with readings at all but the last two stations: the first blade 0.6 degrees coarse and left full, the second as drawn.
 fn carved() -> Job {
     let mut job = demo(0);
     let rig = Rig::new(&job).unwrap();
-    let reading = |radius_m: f64| {
+    let reading = |radius_m: f64, full: f64| {
         let cut = rig.rotor.blade.cut(radius_m);
         BladeReading {
             radius_m,
-            angle_deg: Some(cut.angle_rad.to_degrees() + 0.6),
-            chord_m: Some(cut.chord_m + 0.002),
-            thickness_m: Some(cut.thickness_ratio * cut.chord_m + 0.0015),
+            angle_deg: Some(cut.angle_rad.to_degrees() + 0.6 * full),
+            chord_m: Some(cut.chord_m + 0.002 * full),
+            thickness_m: Some(cut.thickness_ratio * cut.chord_m + 0.0015 * full),
             ..BladeReading::default()
         }
     };
-    let readings = rig.rotor.blade.station_radii_m().take(9).map(reading).collect();
-    job.carved = Some(Carved { blades: vec![CarvedBlade { readings }], ..Carved::default() });
+    let blade = |full: f64| CarvedBlade {
+        readings: rig.rotor.blade.station_radii_m().take(9).map(|r| reading(r, full)).collect(),
+    };
+    job.carved = Some(Carved { blades: vec![blade(1.0), blade(0.0)], ..Carved::default() });
     job
 }
 
