@@ -6,7 +6,12 @@ mod paper;
 
 mod bad_input;
 mod bench;
+mod bench_faults;
+mod bench_solid;
+mod bench_take_off;
 mod carved;
+mod carved_plan;
+mod carved_readings;
 mod cli;
 mod cli_airfoils;
 mod cli_carved;
