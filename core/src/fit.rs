@@ -76,25 +76,18 @@ pub fn condition(rig: &Rig, point: &FlightPoint, air: Air) -> Result<Condition, 
         Setting::Level {} => {
             let met = Solver::new(rig).level(&at, &Trail::default());
             met.map(|met| met.condition)
-                .map_err(|state| if stalled(rig, point, &air) { State::BelowStall } else { state })
+                .map_err(|state| if slower_than_stall(rig, point, &air) { State::BelowStall } else { state })
         }
     }
 }
 
-/// Whether a flight point asks an aeroplane for level flight slower than its stall.
-#[must_use]
-pub fn stalled(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
-    let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return false };
-    let stall = speeds(a, air).stall_m_s;
-    point.setting == Setting::Level {} && stall.is_some_and(|stall| point.airspeed_m_s.unwrap_or(0.0) < stall)
-}
-
-/// Whether a flight point has an aeroplane fly slower than its stall, whatever the setting; standing still is no flight.
+/// Whether a flight point has an aeroplane fly slower than its stall, whatever the setting; standing still is no flight but where it is to be level.
 #[must_use]
 pub fn slower_than_stall(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
     let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return false };
-    let flown = point.airspeed_m_s.filter(|v| *v > 0.0);
-    flown.zip(speeds(a, air).stall_m_s).is_some_and(|(v, stall)| v < stall)
+    let speed_m_s = point.airspeed_m_s.unwrap_or(0.0);
+    let flies = speed_m_s > 0.0 || point.setting == Setting::Level {};
+    flies && speeds(a, air).stall_m_s.is_some_and(|stall| speed_m_s < stall)
 }
 
 /// The condition at which the engine at a throttle setting turns the propeller, at the speed and air of `at`.

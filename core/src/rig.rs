@@ -107,7 +107,7 @@ impl Rig {
                 result.meeting = fit::meeting(self, &at, &result.figures);
                 let taken_w = result.figures.power_w.unwrap_or(0.0);
                 result.notes.extend(fit::beyond_engine(self, &at, taken_w));
-                let slow = fit::stalled(self, point, &air) || fit::slower_than_stall(self, point, &air);
+                let slow = fit::slower_than_stall(self, point, &air);
                 result.notes.extend(slow.then_some(Note::BelowStall));
                 result
             }

@@ -38,7 +38,7 @@ pub enum Fault {
     },
     /// The trailing edge that the job names is too thick for a station.
     #[error(
-        "station {station}, r {radius_mm:.1} mm: a trailing edge of {wanted_mm:.2} mm is wanted (bench.trailing_edge_m); at \
+        "station {station}, r {radius_mm:.1} mm: a least trailing edge of {wanted_mm:.2} mm is wanted; at \
          most {:.2} mm can be drawn there, 5 % of the chord or what the section has itself", floored(*most_mm)
     )]
     TrailingEdgeTooThick {

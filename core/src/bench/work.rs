@@ -55,6 +55,7 @@ pub struct Bench {
     /// Stations between hub and tip.
     pub stations: Vec<Carved>,
     verdict: OnceLock<Result<Verdict, String>>,
+    point: Option<usize>,
     take_off: OnceLock<Option<RemovalPlan>>,
 }
 
@@ -105,6 +106,7 @@ impl Bench {
             rings,
             stations,
             verdict: OnceLock::new(),
+            point: None,
             take_off: OnceLock::new(),
         })
     }
@@ -122,14 +124,20 @@ impl Bench {
         }
     }
 
-    /// What to take off the carved blades, planned for the usual flight point; `None` without readings, or where they allow no plan. Worked out once, when
+    /// The same with the flight point for whose departure wood is taken off the carved blades; the usual one without it.
+    #[must_use]
+    pub fn planned_for(self, point: Option<usize>) -> Self {
+        Self { point, take_off: OnceLock::new(), ..self }
+    }
+
+    /// What to take off the carved blades; `None` without readings, or where they allow no plan. Worked out once, when
     /// it is first asked for.
     #[must_use]
     pub fn take_off(&self) -> Option<&RemovalPlan> {
         let planned = || {
             self.job.carved.as_ref()?;
             let rig = Rig::new(&self.job).ok()?;
-            carved::plan(&rig, carved::usual_point(&rig)).ok()
+            carved::plan(&rig, self.point.unwrap_or_else(|| carved::usual_point(&rig))).ok()
         };
         self.take_off.get_or_init(planned).as_ref()
     }

@@ -54,21 +54,22 @@ impl Solver<'_> {
     /// `None` where it does not: then full throttle may be matched below the limit.
     pub(super) fn past_limit(&self, at: &Condition) -> Option<Result<Full, State>> {
         let shaft = self.rig.shaft.as_ref()?;
-        let rpm = highest_rpm(shaft);
-        let condition = run_up(self.rig, at, rpm);
-        let loads = self.loads(&condition);
-        let taken_w = power_w(&loads, &condition);
-        let past = shaft.available_w(rpm, &at.air).is_none_or(|offered_w| taken_w < offered_w);
-        let held = (taken_w > 0.0).then_some(Full { condition, loads, held: true });
-        past.then(|| held.ok_or(State::OverLimitRpm))
+        let full = self.at_limit(at)?;
+        let taken_w = power_w(&full.loads, &full.condition);
+        let offered_w = shaft.available_w(highest_rpm(shaft), &at.air);
+        let past = offered_w.is_none_or(|offered_w| taken_w < offered_w);
+        past.then_some(if taken_w > 0.0 { Ok(full) } else { Err(State::OverLimitRpm) })
     }
 
     /// The limit rpm, throttled back; `None` where the air alone drives the propeller there, which no throttle holds.
-    pub(super) fn held_at_limit(&self, at: &Condition) -> Option<Full> {
-        let shaft = self.rig.shaft.as_ref()?;
-        let condition = run_up(self.rig, at, highest_rpm(shaft));
-        let loads = self.loads(&condition);
-        (power_w(&loads, &condition) > 0.0).then_some(Full { condition, loads, held: true })
+    fn held_at_limit(&self, at: &Condition) -> Option<Full> {
+        self.at_limit(at).filter(|full| power_w(&full.loads, &full.condition) > 0.0)
+    }
+
+    /// The propeller at the limit rpm, whatever drives it there; `None` without an engine.
+    fn at_limit(&self, at: &Condition) -> Option<Full> {
+        let condition = run_up(self.rig, at, highest_rpm(self.rig.shaft.as_ref()?));
+        Some(Full { condition, loads: self.loads(&condition), held: true })
     }
 
     pub(super) fn loads(&self, at: &Condition) -> Loads {

@@ -17,7 +17,7 @@ pub(super) struct MakingFormProps {
 /// Whether the boxes show the same of two states.
 #[must_use]
 pub fn same_making(a: &State, b: &State) -> bool {
-    a.job().bench == b.job().bench && a.drafts == b.drafts && a.units == b.units
+    a.job().bench == b.job().bench && a.drafts == b.drafts && a.units == b.units && a.point == b.point
 }
 
 /// The boxes; an empty one takes what is usual.

@@ -29,7 +29,7 @@ pub struct WorkshopProps {
     pub number: usize,
     /// The job made ready; may be a frame old.
     pub rig: Option<RigRef>,
-    /// The state: how the blade is made, and the unit of the lengths written on paper.
+    /// The state: how the blade is made, the unit of the lengths written on paper, the flight point selected.
     pub state: Seen,
 }
 
@@ -47,9 +47,12 @@ impl PartialEq for Made {
 #[component]
 pub fn Workshop(props: &WorkshopProps) -> Html {
     let open = use_state_eq(|| false);
-    let made = use_memo((props.rig.clone(), *open), |(rig, open)| {
+    // What to take off carved blades is planned for the flight point selected; nothing else of the bench depends on it.
+    let point = props.state.job().carved.as_ref().map(|_| props.state.point);
+    let made = use_memo((props.rig.clone(), *open, point), |(rig, open, point)| {
         let rig = rig.as_ref().filter(|_| *open)?;
-        Some(Bench::new(&rig.0).map(|bench| Made(Rc::new(bench))))
+        let bench = Bench::new(&rig.0).map(|bench| bench.planned_for(*point));
+        Some(bench.map(|bench| Made(Rc::new(bench))))
     });
     let onunfold = {
         let open = open.setter();

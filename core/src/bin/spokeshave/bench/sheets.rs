@@ -6,7 +6,7 @@ use spokeshave::cautions;
 use spokeshave::rig::Rig;
 
 use super::files::{Folder, made_ready};
-use crate::input::{Outcome, print};
+use crate::input::{Outcome, point_index, print};
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
@@ -15,6 +15,9 @@ pub(crate) struct Args {
     /// Size of the paper
     #[arg(long, default_value = "a4")]
     paper: PaperName,
+    /// Flight point for whose departure wood is taken off carved blades; the first in flight without it
+    #[arg(long, value_name = "NAME")]
+    point: Option<String>,
 }
 
 /// Size of the paper.
@@ -50,7 +53,8 @@ impl From<UnitName> for Unit {
 }
 
 pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
-    let bench = made_ready(rig)?;
+    let point = args.point.as_deref().map(|name| point_index(rig, Some(name))).transpose()?;
+    let bench = made_ready(rig)?.planned_for(point);
     args.out.write(&sheet_files(&bench, args.paper.into(), args.out.unit()))?;
     if let Some(warning) = bench.warning() {
         print(&format!("\n{warning}"))?;
