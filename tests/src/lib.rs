@@ -9,7 +9,8 @@ pub mod goldstein;
 pub mod judge;
 pub mod page;
 pub mod reference;
-pub mod tools;
 pub mod tunnel;
 pub mod validation;
 pub mod wood_case;
+
+pub use spokeshave_prove::tools;

@@ -1,21 +1,41 @@
 //! Everything that reads a text, with texts that are wrong: no panic, no hang, and what is taken holds together.
 //!
 //! `SPOKESHAVE_MUTATE_SECONDS=300 cargo test --release -p spokeshave --test mutated` goes on with new texts for that long, each.
+//! `tests/fuzz` drives the same targets by the coverage of the code.
 
-mod job;
 mod mutation;
-mod outline;
-mod readings;
-mod table;
+mod target;
 
-use serde_json::Value;
+use mutation::{attack, seeds};
+use spokeshave::job::DEMOS;
+use target::{job, outline, readings, table};
 
-/// Whether a text says something to a person: not empty, and no number that is none.
-fn said(words: &str) {
-    assert!(!words.trim().is_empty(), "an error without words");
+#[test]
+fn a_changed_job_file_is_read_or_refused() {
+    let demos = DEMOS.iter().map(|d| d.json.to_string());
+    attack(demos.chain(seeds("job")).collect(), job::read);
 }
 
-/// Every number of a result is written, or left out where there is none.
-fn written(value: impl serde::Serialize) -> Value {
-    serde_json::to_value(value).expect("plain data")
+#[test]
+fn a_changed_outline_is_read_or_refused() {
+    let airfoils = std::path::Path::new(env!("CARGO_MANIFEST_DIR")).join("../airfoils");
+    let shipped = ["clark-y", "raf-6", "naca-44xx"].map(|name| {
+        std::fs::read_to_string(airfoils.join(name).join("outline.dat")).expect("a shipped outline")
+    });
+    attack(shipped.into_iter().chain(seeds("outline")).collect(), outline::read);
+}
+
+#[test]
+fn a_changed_table_is_read_or_refused() {
+    attack(seeds("table"), table::read);
+}
+
+#[test]
+fn changed_readings_of_blades_are_read_or_refused() {
+    attack(seeds("carved"), readings::blades);
+}
+
+#[test]
+fn a_changed_logbook_is_read_or_refused() {
+    attack(seeds("logbook"), readings::flights);
 }

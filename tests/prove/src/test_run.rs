@@ -1,6 +1,6 @@
 //! Running the tests of every crate and counting them.
 
-use super::report::Tests;
+use crate::report::Tests;
 use anyhow::Result;
 use spokeshave_press::{Workspace, run};
 use std::io::{BufRead, BufReader};

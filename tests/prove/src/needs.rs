@@ -3,7 +3,7 @@
 
 use anyhow::{Context, Result};
 use spokeshave_press::{Workspace, run};
-use spokeshave_tests::tools::{
+use spokeshave_prove::tools::{
     AXE_VERSION, JUDGES, axe_script, chromedriver, chromium, judges_python, on_path, xdotool, xvfb,
 };
 use std::process::Command;

@@ -1,11 +1,14 @@
 //! The second command of the README: sets up what the checks need, runs them all and sums up.
 
-mod prove;
+mod everything;
+mod needs;
+mod report;
+mod test_run;
 
 use std::process::ExitCode;
 
 fn main() -> ExitCode {
-    match prove::everything() {
+    match everything::everything() {
         Ok(report) => {
             print!("{report}");
             if report.is_clean() { ExitCode::SUCCESS } else { ExitCode::FAILURE }

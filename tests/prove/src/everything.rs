@@ -1,11 +1,7 @@
 //! All checks, in the order in which a fault is cheapest to find.
 
-mod needs;
-mod report;
-mod test_run;
-
-pub(crate) use report::Report;
-
+use crate::report::Report;
+use crate::{needs, test_run};
 use anyhow::Result;
 use spokeshave_press::{Source, Workspace, build_page, run};
 use std::time::{Duration, Instant};
@@ -18,16 +14,16 @@ pub(crate) fn everything() -> Result<Report> {
     let workspace = Workspace::find()?;
     needs::set_up(&workspace)?;
     let mut report = Report::default();
-    report.check("layout of the sources", || cargo(&workspace, &["fmt", "--all", "--check"]));
-    report.check("lints", || {
-        cargo(
-            &workspace,
-            &["clippy", "--release", "--workspace", "--all-targets", "--", "--deny", "warnings"],
-        )
-    });
-    // Side by side: linking the page as a whole keeps one core busy, compiling the tests the others.
+    // Side by side: linking the page as a whole keeps one core busy, linting and compiling the tests the others.
     let (page, compiled) = std::thread::scope(|scope| {
         let page = scope.spawn(|| timed(|| build_page(&workspace, Source::Any)));
+        report.check("layout of the sources", || cargo(&workspace, &["fmt", "--all", "--check"]));
+        report.check("lints", || {
+            cargo(
+                &workspace,
+                &["clippy", "--release", "--workspace", "--all-targets", "--", "--deny", "warnings"],
+            )
+        });
         let compiled = timed(|| test_run::compile(&workspace));
         (page.join(), compiled)
     });

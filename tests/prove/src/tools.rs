@@ -47,7 +47,7 @@ pub fn axe_script(target: &Path) -> PathBuf {
 }
 
 /// What the judges of the bench's files are installed from.
-pub const JUDGES: &str = include_str!("../judges/requirements.txt");
+pub const JUDGES: &str = include_str!("../../judges/requirements.txt");
 
 /// The Python that has the other judges, once they are installed into `target`.
 #[must_use]
