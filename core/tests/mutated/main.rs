@@ -4,11 +4,11 @@
 //! `tests/fuzz` drives the same targets by the coverage of the code.
 
 mod mutation;
-mod target;
+mod reader;
 
 use mutation::{attack, seeds};
+use reader::{job, outline, readings, table};
 use spokeshave::job::DEMOS;
-use target::{job, outline, readings, table};
 
 #[test]
 fn a_changed_job_file_is_read_or_refused() {

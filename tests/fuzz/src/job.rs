@@ -1,7 +1,7 @@
 #![no_main]
 #![allow(dead_code, reason = "each program drives one of the targets")]
 
-#[path = "../../../core/tests/mutated/target/mod.rs"]
-mod target;
+#[path = "../../../core/tests/mutated/reader/mod.rs"]
+mod reader;
 
-libfuzzer_sys::fuzz_target!(|text: &str| target::job::read(text));
+libfuzzer_sys::fuzz_target!(|text: &str| reader::job::read(text));
