@@ -43,6 +43,11 @@ fn ranges(c: &mut Criterion) {
     c.bench_function("envelope, 60 speeds, departures at 4 radii", |b| {
         b.iter(|| fit::envelope(&rig, black_box(&point), 60, &[0.35, 0.5, 0.75, 0.9]));
     });
+    for speeds in [15, 30, 120] {
+        c.bench_function(&format!("growth: envelope, {speeds} speeds"), |b| {
+            b.iter(|| fit::envelope(&rig, black_box(&point), speeds, &[0.35, 0.5, 0.75, 0.9]));
+        });
+    }
     let speeds: Vec<f64> = (0..40).map(|i| 1.5 * f64::from(i)).collect();
     let heights: Vec<f64> = (0..40).map(|i| 100.0 * f64::from(i)).collect();
     let mut group = c.benchmark_group("maps");

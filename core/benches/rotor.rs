@@ -50,6 +50,23 @@ fn lookups_alone(c: &mut Criterion) {
     });
 }
 
+/// How the analysis grows with the elements, and the map with its size.
+fn growth(c: &mut Criterion) {
+    let mut group = c.benchmark_group("growth");
+    for elements in [15, 30, 60, 120, 240] {
+        let (rig, at) = rig(elements);
+        group.bench_function(format!("analysis, {elements} elements"), |b| {
+            b.iter(|| rig.rotor.loads(black_box(&at)));
+        });
+    }
+    let (rig, _) = rig(40);
+    for (speeds, radii) in [(15, 40), (30, 40), (120, 40), (60, 80)] {
+        group.bench_function(format!("departure map, {speeds} speeds x {radii} radii"), |b| {
+            b.iter(|| rig.map(black_box(2), Along::FullThrottle, speeds, radii));
+        });
+    }
+}
+
 fn map(c: &mut Criterion) {
     let (rig, _) = rig(40);
     c.bench_function("departure map, 60 speeds x 40 radii", |b| {
@@ -74,5 +91,5 @@ fn stations(rotor: &Rotor, at: &Condition) -> Vec<spokeshave::result::StationRes
     rotor.blade.station_radii_m().map(|r| station(rotor, &rotor.ring(r), at)).collect()
 }
 
-criterion_group!(benches, analysis, lookups_alone, map, edit);
+criterion_group!(benches, analysis, lookups_alone, growth, map, edit);
 criterion_main!(benches);

@@ -38,7 +38,16 @@ impl Goldstein {
     /// Never: the equations have a solution.
     #[must_use]
     pub fn new(blades: u32, advance: f64) -> Self {
-        let [coarse, fine] = [COARSE, 2 * COARSE].map(|n| Sheet::new(f64::from(blades), advance, n));
+        Self::on_grid(blades, advance, COARSE)
+    }
+
+    /// The same with so many nodes from the axis to the edge on the coarse of the two grids.
+    ///
+    /// # Panics
+    /// Never: the equations have a solution.
+    #[must_use]
+    pub fn on_grid(blades: u32, advance: f64, nodes: usize) -> Self {
+        let [coarse, fine] = [nodes, 2 * nodes].map(|n| Sheet::new(f64::from(blades), advance, n));
         Self { advance, coarse, fine }
     }
 

@@ -38,8 +38,10 @@ held! {
     validate_linear_retardation_howarth
     whole_propellers_agree
     validate_tip_loss_goldstein
+    validate_goldsteins_factor_of_the_core
     validate_goldstein_by_another_grid
     validate_at_rest_deters_2014
+    validate_goldsteins_tip_deters_2014
     validate_drag_anderson_cp_1
     validate_speeds_common_practice
     validate_angles_common_practice

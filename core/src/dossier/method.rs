@@ -1,6 +1,6 @@
 //! How it was worked out, from what sources, and where that does not hold.
 
-use crate::job::Engine;
+use crate::job::{Engine, TipLoss};
 use crate::result::{Note, PointResult};
 use crate::section::Family;
 
@@ -30,7 +30,16 @@ fn methods(told: &Told) -> Vec<(&'static str, String)> {
     let job = &told.rig.job;
     let m = &job.method;
     let mut bits = vec!["blade-element momentum (Glauert 1935) in axial flow".to_string()];
-    bits.push(format!("Prandtl's loss at the tip{}", if m.hub_loss { " and the hub" } else { "" }));
+    let tip = match m.tip_loss {
+        TipLoss::Prandtl => "Prandtl's loss at the tip",
+        TipLoss::Goldstein => "Goldstein's loss at the tip (1929)",
+    };
+    let hub = match (m.hub_loss, m.tip_loss) {
+        (false, _) => "",
+        (true, TipLoss::Prandtl) => " and the hub",
+        (true, TipLoss::Goldstein) => ", Prandtl's at the hub",
+    };
+    bits.push(format!("{tip}{hub}"));
     bits.push(format!("Buhl (2005) in the windmill brake state, {} elements a blade", m.elements));
     let mut section =
         vec!["tables by thickness and Reynolds number, beyond them Viterna and Corrigan (1981)".to_string()];

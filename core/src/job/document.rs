@@ -112,13 +112,34 @@ pub struct Method {
     pub stall_delay: bool,
     /// Whether the hub takes load off the root.
     pub hub_loss: bool,
+    /// Whose factor tells what the tip takes off.
+    pub tip_loss: TipLoss,
     /// Amplification exponent at transition of the shipped tables: 9 quiet air, 4 disturbed air.
     pub n_crit: f64,
 }
 
+/// Whose factor tells what the tip takes off the load.
+#[derive(Clone, Copy, Debug, Default, PartialEq, Eq, Serialize, Deserialize)]
+#[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
+#[serde(rename_all = "kebab-case")]
+pub enum TipLoss {
+    /// Prandtl's (1919): flat sheets behind the blades.
+    #[default]
+    Prandtl,
+    /// Goldstein's (1929): helical sheets. Exact for light loads; at coarse pitch and with few blades smaller than Prandtl's.
+    Goldstein,
+}
+
 impl Default for Method {
     fn default() -> Self {
-        Self { elements: 40, compressibility: true, stall_delay: true, hub_loss: true, n_crit: 9.0 }
+        Self {
+            elements: 40,
+            compressibility: true,
+            stall_delay: true,
+            hub_loss: true,
+            tip_loss: TipLoss::Prandtl,
+            n_crit: 9.0,
+        }
     }
 }
 

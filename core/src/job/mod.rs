@@ -17,7 +17,7 @@ pub use document::{
     Electric, Engine, Factors, Figure, Flange, FlightPoint, Held, HeldTo, HeldToKind, Hub, Interpolation,
     Job, Limits, LinePoint, LoadPoint, LogReading, Logbook, Making, Method, Multirotor, OwnMaterial, Piston,
     PitchControl, PowerPoint, Propeller, Rotation, RpmLimit, Section, Setting, Species, Station,
-    StressLimits, USUAL_SPECIES, Widths, Wishes, Wood,
+    StressLimits, TipLoss, USUAL_SPECIES, Widths, Wishes, Wood,
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 

@@ -100,7 +100,7 @@ pub struct Balance {
     pub alpha_rad: f64,
     /// Coefficients there.
     pub section: Coefficients,
-    /// Prandtl's factor F.
+    /// The factor F of tip and hub.
     pub loss: f64,
     /// Speed W at which the air meets the blade, m/s.
     pub speed_m_s: f64,

@@ -1,8 +1,10 @@
-//! Prandtl's loss at tip and hub.
+//! Prandtl's loss at tip and hub; at the tip, where the job asks for it, Goldstein's (`goldstein`).
 //!
 //! `F = F_tip F_hub`, each `(2/π) acos(e^−f)` with `f_tip = B/2 (R − r)/(r |sin φ|)` and the choice
 //! `f_hub = B/2 (r − rh)/(rh |sin φ|)`. Source: L. Prandtl's appendix to A. Betz, *Schraubenpropeller mit
 //! geringstem Energieverlust*, 1919; H. Glauert, *Airplane Propellers*, 1935.
+
+pub mod goldstein;
 
 use std::f64::consts::{FRAC_2_PI, FRAC_PI_2};
 
@@ -16,6 +18,8 @@ const NO_LOSS: f64 = 36.0;
 pub struct Ends {
     tip: f64,
     hub: f64,
+    /// Goldstein's factor at the tip as a share of Prandtl's.
+    exact: Option<goldstein::Share>,
 }
 
 impl Ends {
@@ -28,7 +32,14 @@ impl Ends {
         } else {
             f64::INFINITY
         };
-        Self { tip, hub }
+        Self { tip, hub, exact: None }
+    }
+
+    /// The same with Goldstein's factor at the tip, for a number of blades at `r/R`. It is not let above 1, as it would be beside
+    /// the axis of few blades at coarse pitch: it knows of no hub.
+    #[must_use]
+    pub fn exact_at_tip(self, blades: u32, fraction: f64) -> Self {
+        Self { exact: Some(goldstein::Share::new(blades, fraction)), ..self }
     }
 
     /// Whether the load is nothing here by definition.
@@ -40,7 +51,9 @@ impl Ends {
     /// The factor F at an inflow angle given by `|sin φ|`.
     #[must_use]
     pub fn factor(&self, sin_phi: f64) -> f64 {
-        one_end(self.tip, sin_phi) * one_end(self.hub, sin_phi)
+        let tip = one_end(self.tip, sin_phi);
+        let tip = self.exact.map_or(tip, |share| (tip * share.at(sin_phi)).min(1.0));
+        tip * one_end(self.hub, sin_phi)
     }
 }
 

@@ -21,7 +21,7 @@ use std::f64::consts::PI;
 
 use crate::air::Air;
 use crate::blade::{Blade, Cut};
-use crate::job::Method;
+use crate::job::{Method, TipLoss};
 use crate::section::{Local, Situation};
 use element::{Balance, Blend, Element, Near};
 use loss::Ends;
@@ -158,9 +158,11 @@ impl Rotor {
         // Next to a wide root the factor would pass one, and lift the potential flow's: it cannot.
         let snel = (3.1 * (cut.chord_m / radius_m).powi(2)).min(1.0);
         let delay = snel * delay_fade(radius_m / blade.radius_m);
+        let ends = Ends::new(b, radius_m, blade.radius_m, blade.hub_radius_m, self.method.hub_loss);
+        let exact = self.method.tip_loss == TipLoss::Goldstein;
         Ring {
             cut,
-            ends: Ends::new(b, radius_m, blade.radius_m, blade.hub_radius_m, self.method.hub_loss),
+            ends: if exact { ends.exact_at_tip(blade.count, radius_m / blade.radius_m) } else { ends },
             solidity: b * cut.chord_m / (2.0 * PI * radius_m),
             width_m: 0.0,
             stall_delay: if self.method.stall_delay { delay } else { 0.0 },

@@ -2,11 +2,14 @@
 //!
 //! Method: C. N. Adkins and R. H. Liebeck, *Design of Optimum Propellers*, J. Propulsion and Power 10(5), 1994. The displacement velocity ζ (over the airspeed)
 //! is the same at every radius. With `λ = V/(Ω R)`, `ξ = r/R`, `x = ξ/λ`, `ε = cd/cl`: `tan φt = λ (1 + ζ/2)`, `tan φ = tan φt/ξ`, `F = (2/π) acos e^−f`,
-//! `f = B/2 (1 − ξ)/sin φt`, `G = F x cos φ sin φ`. Without hub loss; not for rest.
+//! `f = B/2 (1 − ξ)/sin φt`, `G = F x cos φ sin φ`. Without hub loss; not for rest. Where the job asks for
+//! Goldstein's loss, F is his at the pitch `λ = tan φt` of the wake (A. Betz and S. Goldstein: the circulation of least induced loss).
 
 use std::f64::consts::{FRAC_2_PI, PI};
 
 use super::ShapeError;
+use crate::job::TipLoss;
+use crate::rotor::loss::Ends;
 
 /// What is asked of the propeller.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -34,6 +37,8 @@ pub struct Task {
     pub density_kg_m3: f64,
     /// What is asked.
     pub wanted: Wanted,
+    /// Whose factor F.
+    pub tip_loss: TipLoss,
 }
 
 /// A propeller of least induced loss.
@@ -54,7 +59,7 @@ pub struct Design {
 pub struct Flow {
     /// Inflow angle φ, rad.
     pub inflow_rad: f64,
-    /// Prandtl's factor F.
+    /// The factor F.
     pub loss: f64,
     /// Axial factor a.
     pub axial: f64,
@@ -141,8 +146,13 @@ impl Task {
         let tan_tip = lambda * (1.0 + 0.5 * zeta);
         let sin_tip = tan_tip / tan_tip.hypot(1.0);
         let phi = tan_tip.atan2(xi);
-        let f = 0.5 * f64::from(self.blades) * (1.0 - xi).max(0.0) / sin_tip;
-        let loss = FRAC_2_PI * (-f).exp().acos();
+        let b = f64::from(self.blades);
+        let loss = match self.tip_loss {
+            TipLoss::Prandtl => FRAC_2_PI * (-0.5 * b * (1.0 - xi).max(0.0) / sin_tip).exp().acos(),
+            TipLoss::Goldstein => {
+                Ends::new(b, xi, 1.0, 0.0, false).exact_at_tip(self.blades, xi).factor(phi.sin())
+            }
+        };
         (phi, loss, loss * xi / lambda * phi.cos() * phi.sin())
     }
 }

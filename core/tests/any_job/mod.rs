@@ -1,7 +1,7 @@
 //! Any valid job.
 
 use proptest::prelude::*;
-use spokeshave::job::{DEMOS, FlightPoint, Job, PitchControl, Setting, Station, most_governed_rpm};
+use spokeshave::job::{DEMOS, FlightPoint, Job, PitchControl, Setting, Station, TipLoss, most_governed_rpm};
 use spokeshave::section::library;
 
 /// How many random jobs a property is tried on: few each time, `SPOKESHAVE_CASES` times as many where that is set.
@@ -59,7 +59,7 @@ prop_compose! {
     pub fn jobs()(
         demo in 0usize..3, stations in stations(), setting in settings(), pitch_control in pitch_controls(),
         airspeed in 0.0..340.0f64, altitude_m in -1000.0..20_000.0f64, isa_offset_k in -60.0..60.0f64,
-        blades in 1u32..=12, hub in 0.0..0.9f64, compressibility: bool, stall_delay: bool, hub_loss: bool,
+        blades in 1u32..=12, hub in 0.0..0.9f64, compressibility: bool, stall_delay: bool, hub_loss: bool, exact: bool,
     ) -> Job {
         let mut job = Job::from_json(DEMOS[demo].json).expect("a valid demo");
         job.propeller.stations = stations;
@@ -73,6 +73,7 @@ prop_compose! {
             *rpm = rpm.min(most);
         }
         (job.method.compressibility, job.method.stall_delay, job.method.hub_loss) = (compressibility, stall_delay, hub_loss);
+        job.method.tip_loss = if exact { TipLoss::Goldstein } else { TipLoss::Prandtl };
         let top = FlightPoint { name: "top".into(), altitude_m, isa_offset_k, airspeed_m_s: None, setting: Setting::FullThrottle {} };
         let asked = FlightPoint { name: "asked".into(), airspeed_m_s: Some(airspeed), setting, ..top.clone() };
         job.flight_points = vec![asked, top];

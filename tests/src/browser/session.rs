@@ -201,7 +201,10 @@ impl Browser {
     }
 
     /// A command of the browser's own protocol.
-    pub(super) async fn command(&self, name: &str, parameters: Value) -> Result<Value> {
+    ///
+    /// # Errors
+    /// If the browser refuses it.
+    pub async fn command(&self, name: &str, parameters: Value) -> Result<Value> {
         cdp::execute(&self.client, name, parameters).await.with_context(|| name.to_owned())
     }
 

@@ -51,7 +51,7 @@ const MACHINE: &str = "Engine and aircraft";
 const WOOD: &str = "Wood and strength";
 
 /// All of them, in the order of the list.
-pub static TOPICS: [Topic; 32] = [
+pub static TOPICS: [Topic; 34] = [
     Topic::new("Air", "validate_air_iso_2533", air::standard),
     Topic::new(SOLVER, "joukowski_lift_is_exact", exact_flow::joukowski_lift),
     Topic::new(SOLVER, "joukowski_speeds_are_exact", exact_flow::joukowski_speeds),
@@ -64,9 +64,11 @@ pub static TOPICS: [Topic; 32] = [
     Topic::new(ROTOR, "whole_propellers_agree", rotor::whole_propellers),
     Topic::new(ROTOR, "single_stations_agree", rotor::single_stations),
     Topic::new(ROTOR, "validate_tip_loss_goldstein", tip_loss::prandtl_by_goldstein),
+    Topic::new(ROTOR, "validate_goldsteins_factor_of_the_core", tip_loss::the_core_by_goldstein),
     Topic::new(ROTOR, "validate_goldstein_by_another_grid", tip_loss::goldstein_twice),
     Topic::new(TUNNEL, "validate_thrust_and_power_deters_2014", tunnel::moving),
     Topic::new(TUNNEL, "validate_at_rest_deters_2014", tunnel::at_rest),
+    Topic::new(TUNNEL, "validate_goldsteins_tip_deters_2014", tunnel::with_goldsteins_tip),
     Topic::new(TUNNEL, "known_miss_at_the_design_angle", tunnel::at_the_design_angle),
     Topic::new(MACHINE, "validate_drag_anderson_cp_1", aircraft::anderson),
     Topic::new(MACHINE, "validate_speeds_common_practice", aircraft::light),

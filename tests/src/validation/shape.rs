@@ -1,6 +1,7 @@
 //! Least induced loss against an independent implementation of the same published equations (see
 //! `reference/README.md`).
 
+use spokeshave::job::TipLoss;
 use spokeshave::rig::rotation_rad_s;
 use spokeshave::shape::adkins_liebeck::{Design, Task, Wanted, design};
 
@@ -30,6 +31,7 @@ pub fn task(wanted: Wanted) -> Task {
         blades: 2,
         density_kg_m3: input("rho"),
         wanted,
+        tip_loss: TipLoss::Prandtl,
     }
 }
 

@@ -17,7 +17,7 @@ const SHEETS: &str = "Prandtl takes the sheets behind the blades for flat ones t
                       one side of their edge: true where the gap between them is small beside the radius, \
                       that is for fine pitch or many blades. Elsewhere F is too large, and the air that a \
                       station meets is computed as turned too little, by that share of the turning. The \
-                      method keeps Prandtl's factor";
+                      job may ask for Goldstein's factor";
 
 /// Where the two are compared.
 pub const FRACTIONS: [f64; 4] = [0.5, 0.7, 0.9, 0.95];
@@ -56,6 +56,33 @@ const MISSES: &[(u32, f64, f64)] = &[
     (4, 0.4, 0.7),
     (4, 0.4, 0.9),
 ];
+
+const TABLE: Basis = Basis {
+    source: "S. Goldstein 1929, as above, between the places of the core's table",
+    mark: Mark::Computed,
+    why: "a tenth of what Prandtl's factor is held to: what leading over between the table's places may cost",
+};
+
+/// The factor that the core offers beside Prandtl's, where its table has no entry.
+pub(super) fn the_core_by_goldstein() -> Vec<Check> {
+    let of = |(blades, advance): (u32, f64)| {
+        let exact = Goldstein::new(blades, advance);
+        [0.45, 0.7, 0.88, 0.94].map(|x| {
+            let ends = Ends::new(f64::from(blades), x, 1.0, 0.0, false).exact_at_tip(blades, x);
+            let got = ends.factor(advance / advance.hypot(x));
+            TABLE.within(
+                format!("Goldstein's F, {blades} blades, λ {advance}, {x} R"),
+                got,
+                exact.factor(x),
+                0.005,
+            )
+        })
+    };
+    [(2, 0.07), (2, 0.14), (2, 0.28), (2, 0.55), (3, 0.14), (3, 0.28), (4, 0.28), (6, 0.55)]
+        .into_iter()
+        .flat_map(of)
+        .collect()
+}
 
 const KNOWN: Basis = Basis {
     source: "S. Goldstein 1929, as above, by another solution on a grid: B Γ Ω/(2π V w) at λ 0.2, two \

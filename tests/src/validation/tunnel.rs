@@ -2,6 +2,7 @@
 
 use std::sync::LazyLock;
 
+use spokeshave::job::TipLoss;
 use spokeshave::result::PointResult;
 use spokeshave::rig::Rig;
 
@@ -33,8 +34,10 @@ pub struct Answer {
 }
 
 impl Answer {
-    fn of(turn_deg: f64, n_crit: f64) -> Self {
-        let points = Rig::new(&job(turn_deg, n_crit)).expect("a valid job").analysis().flight_points;
+    fn of(turn_deg: f64, n_crit: f64, tip_loss: TipLoss) -> Self {
+        let mut job = job(turn_deg, n_crit);
+        job.method.tip_loss = tip_loss;
+        let points = Rig::new(&job).expect("a valid job").analysis().flight_points;
         let figures = |p: &PointResult| (p.figures.ct.unwrap_or(f64::NAN), p.figures.cp.unwrap_or(f64::NAN));
         let moving = points.iter().map(figures).zip(&MEASURED).map(|((ct, cp), m)| (m.0, ct, cp)).collect();
         Self { moving, rest: figures(&points[MEASURED.len()]) }
@@ -54,11 +57,15 @@ impl Answer {
 }
 
 /// With the angle of the print by photograph, in quiet air, n = 9.
-pub static PHOTOGRAPHED: LazyLock<Answer> = LazyLock::new(|| Answer::of(PRINT_TURN_DEG, 9.0));
+pub static PHOTOGRAPHED: LazyLock<Answer> =
+    LazyLock::new(|| Answer::of(PRINT_TURN_DEG, 9.0, TipLoss::Prandtl));
 /// The same in disturbed air, n = 4.
-pub static DISTURBED: LazyLock<Answer> = LazyLock::new(|| Answer::of(PRINT_TURN_DEG, 4.0));
+pub static DISTURBED: LazyLock<Answer> = LazyLock::new(|| Answer::of(PRINT_TURN_DEG, 4.0, TipLoss::Prandtl));
 /// With the angle of the design.
-pub static DRAWN: LazyLock<Answer> = LazyLock::new(|| Answer::of(0.0, 9.0));
+pub static DRAWN: LazyLock<Answer> = LazyLock::new(|| Answer::of(0.0, 9.0, TipLoss::Prandtl));
+/// With Goldstein's loss at the tip, else as photographed in quiet air.
+pub static GOLDSTEIN: LazyLock<Answer> =
+    LazyLock::new(|| Answer::of(PRINT_TURN_DEG, 9.0, TipLoss::Goldstein));
 
 /// Thrust and power over J with the print's own angle.
 pub(super) fn moving() -> Vec<Check> {
@@ -75,6 +82,20 @@ pub(super) fn moving() -> Vec<Check> {
         BASIS
             .relative("CT at J 0.63 alone", PHOTOGRAPHED.moving[last].1, MEASURED[last].1, 0.03)
             .misses(NO_THRUST),
+    ]
+}
+
+/// Thrust and power over J and at rest with Goldstein's loss at the tip.
+pub(super) fn with_goldsteins_tip() -> Vec<Check> {
+    let (ct, cp) = GOLDSTEIN.misfit();
+    let share = |name: &str, got| {
+        BASIS.within(format!("{name} with Goldstein's loss at the tip, the same misfit"), got, 0.0, 0.03)
+    };
+    vec![
+        share("CT", ct),
+        share("CP", cp),
+        BASIS.relative("CT at rest with Goldstein's loss at the tip", GOLDSTEIN.rest.0, AT_REST.0, 0.02),
+        BASIS.relative("CP at rest with Goldstein's loss at the tip", GOLDSTEIN.rest.1, AT_REST.1, 0.03),
     ]
 }
 

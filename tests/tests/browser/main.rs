@@ -2,6 +2,7 @@
 
 mod access;
 mod carved;
+mod growth;
 mod input;
 mod job;
 mod machine;

@@ -2,7 +2,7 @@
 
 use spokeshave::drawn::{measured_by, with_station};
 use spokeshave::job::{
-    Aim, AngleReference, Flange, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting,
+    Aim, AngleReference, Flange, FlightPoint, Held, Job, PitchControl, Rotation, Section, Setting, TipLoss,
     most_governed_rpm,
 };
 
@@ -41,6 +41,8 @@ pub enum Choice {
     StallDelay(bool),
     /// Whether the hub takes load off the root.
     HubLoss(bool),
+    /// Whose factor tells what the tip takes off.
+    TipLoss(TipLoss),
     /// Amplification exponent at which the tables' boundary layers turn turbulent.
     Amplification(f64),
     /// A station more, halfway to the next one outward.
@@ -205,6 +207,7 @@ impl Choice {
             Self::Compressibility(_) => "compressibility".into(),
             Self::StallDelay(_) => "stall delay".into(),
             Self::HubLoss(_) => "hub loss".into(),
+            Self::TipLoss(_) => "tip loss".into(),
             Self::Amplification(_) => "quietness of the air".into(),
             Self::AddStation(i) => format!("add a station after {}", i + 1),
             Self::RemoveStation(i) => format!("remove station {}", i + 1),
@@ -255,6 +258,7 @@ impl Choice {
             Self::Compressibility(on) => method.compressibility = *on,
             Self::StallDelay(on) => method.stall_delay = *on,
             Self::HubLoss(on) => method.hub_loss = *on,
+            Self::TipLoss(whose) => method.tip_loss = *whose,
             Self::Amplification(n) => method.n_crit = *n,
             Self::AddStation(after) => return more_stations(job, *after),
             Self::RemoveStation(i) => {

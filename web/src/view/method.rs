@@ -2,6 +2,7 @@
 
 use std::rc::Rc;
 
+use spokeshave::job::TipLoss;
 use spokeshave::result::{Note, PointResult, State};
 use spokeshave::section::Family;
 use yew::prelude::*;
@@ -33,7 +34,7 @@ pub fn MethodPanel(props: &MethodPanelProps) -> Html {
             <div>
                 <h3>{ "Method" }</h3>
                 <p class="note">
-                    { "Blade-element momentum with Prandtl's loss at tip and hub, solved for every element by bracketing. \
+                    { "Blade-element momentum with losses at tip and hub, solved for every element by bracketing. \
                        It leaves out yawed flow, blade sweep, bending and twist under load, and how one blade's wake meets \
                        the fuselage. Air is the ISO standard atmosphere with an offset." }
                 </p>
@@ -99,10 +100,19 @@ fn Switches(props: &SwitchesProps) -> Html {
             { switch("Mach number changes lift and drag", method.compressibility, Choice::Compressibility) }
             { switch("Rotation delays stall inboard", method.stall_delay, Choice::StallDelay) }
             { switch("The hub takes load off the root", method.hub_loss, Choice::HubLoss) }
+            { tip_loss(&act, method.tip_loss) }
             <Labelled shown={Shown::of(state, &[], Field::Elements)} label="Elements of a blade" />
             { quietness(&act, method.n_crit) }
         </div>
     }
+}
+
+/// Whose factor at the tip. Goldstein's is exact for light loads, Prandtl's is what most comparisons are made with.
+fn tip_loss(act: &Act, whose: TipLoss) -> Html {
+    const FACTORS: [TipLoss; 2] = [TipLoss::Prandtl, TipLoss::Goldstein];
+    let options: Vec<AttrValue> = vec!["Prandtl (1919)".into(), "Goldstein (1929)".into()];
+    let onpick = act.on(|i: usize| Action::Choose(Choice::TipLoss(FACTORS[i.min(1)]), Running::default()));
+    html! { <Pick label="Loss at the tip" {options} picked={FACTORS.iter().position(|f| *f == whose)} {onpick} /> }
 }
 
 /// Which set of tables: boundary layers turn turbulent later in quiet air. A job file may ask for another n.

@@ -67,9 +67,10 @@ fn by_scan(e: &Element) -> Option<f64> {
 prop_compose! {
     fn situations()(
         v in prop_oneof![Just(0.0), 0.01..5.0f64, 5.0..120.0f64], turning in 5.0..250.0f64, angle in -40.0..80.0f64,
-        solidity in 0.005..0.6f64, x in 0.16..0.995f64, blades in prop::sample::select(vec![1.0, 2.0, 3.0, 6.0]),
+        solidity in 0.005..0.6f64, x in 0.16..0.995f64, blades in prop::sample::select(vec![1, 2, 3, 6]), exact: bool,
     ) -> (f64, f64, f64, f64, Ends) {
-        (v, turning, angle, solidity, Ends::new(blades, x, 1.0, 0.15, true))
+        let ends = Ends::new(f64::from(blades), x, 1.0, 0.15, true);
+        (v, turning, angle, solidity, if exact { ends.exact_at_tip(blades, x) } else { ends })
     }
 }
 

@@ -170,6 +170,7 @@ fn task(rig: &Rig, asked: &LossTask, at: &Condition) -> Result<Task, ShapeError>
         blades: blade.count,
         density_kg_m3: at.air.density_kg_m3,
         wanted,
+        tip_loss: rig.job.method.tip_loss,
     })
 }
 
