@@ -30,10 +30,7 @@ pub fn Drop(props: &DropProps) -> Html {
         Callback::from(move |e: KeyboardEvent| {
             if e.key() == "Escape" && *open {
                 open.set(false);
-                if let Some(button) = button.cast::<HtmlElement>() {
-                    // Fails only for an element that is gone.
-                    let _ = button.focus();
-                }
+                focus(&button);
             }
         })
     };
@@ -48,11 +45,13 @@ pub fn Drop(props: &DropProps) -> Html {
         })
     };
     let onclick = {
-        let open = open.clone();
+        let (open, button) = (open.clone(), button.clone());
         Callback::from(move |e: MouseEvent| {
             let element = e.target().and_then(|t| t.dyn_into::<web_sys::Element>().ok());
             if element.is_some_and(|e| e.closest("button:not([role=radio])").ok().flatten().is_some()) {
                 open.set(false);
+                // What was pressed goes out of sight, and the focus would go with it.
+                focus(&button);
             }
         })
     };
@@ -63,5 +62,12 @@ pub fn Drop(props: &DropProps) -> Html {
             </button>
             <div class="drop-sheet" hidden={!*open} tabindex="-1" {onclick}>{ props.children.clone() }</div>
         </div>
+    }
+}
+
+fn focus(button: &NodeRef) {
+    if let Some(button) = button.cast::<HtmlElement>() {
+        // Fails only for an element that is gone.
+        let _ = button.focus();
     }
 }

@@ -1,0 +1,109 @@
+"""One job from the drawing to the logbook: changed, shaped, measured, flown, saved, opened again, read in inches."""
+
+import shutil
+from pathlib import Path
+
+from engine.hand import BACK, ENTER, box, enter, fold_out, hit, near, open_page, press, says, shows, started, until
+
+INCH_M = 0.0254
+
+
+def whole(browser, page, folder, task):
+    station = task["station"]
+    open_page(browser, page)
+    shows(browser, station, task["drawn"])
+    edit(browser, page, task)
+    shape(browser, task)
+    carve(browser, task)
+    log(browser, task)
+    save(browser, folder)
+    reopen(browser, folder, task)
+    inches(browser, task)
+
+
+def edit(browser, page, task):
+    """A station turned, taken back, turned and found after a reload; then mass and engine, which the fit follows."""
+    station = task["station"]
+    first, *others = task["edits"]
+    enter(browser, first["label"], first["text"])
+    shows(browser, station, first["shown"])
+    browser.type(box(first["label"]), BACK)
+    shows(browser, station, task["drawn"])
+    enter(browser, first["label"], first["text"])
+    shows(browser, station, first["shown"])
+    angle = f"return JSON.parse(spokeshave.keep.atStart() || '{{}}').propeller?.stations[{station - 1}].angle_deg"
+    until("the job to be kept", lambda: browser.run(angle) == float(first["text"]))
+    browser.go(Path(page).as_uri())
+    started(browser)
+    shows(browser, station, first["shown"])
+    for other in others:
+        enter(browser, other["label"], other["text"])
+        shows(browser, station, other["shown"])
+
+
+def shape(browser, task):
+    press(browser, "Best-incidence twist at Cruise")
+    says(browser, "“twist, Cruise” stands beside the drawn blade")
+    press(browser, "Use twist, Cruise")
+    shows(browser, task["station"], task["twisted"])
+
+
+def carve(browser, task):
+    """Readings of both blades, down the column by Enter; the differences are the core's."""
+    fold_out(browser, "carved")
+    says(browser, "Type what the protractor")
+    for blade, faces in enumerate(task["faces"], 1):
+        hit(browser, box(f"Angle of blade {blade} at station 1, degrees"))
+        browser.keys("".join(text + ENTER for text in faces))
+    for blade, wanted in enumerate(task["from_drawn"], 1):
+        cells(browser, f"Blade {blade} against the drawing", 1, wanted)
+
+
+def log(browser, task):
+    """A standing run; what it tells is what the core finds."""
+    fold_out(browser, "logbook")
+    press(browser, "Add a reading")
+    first = "return document.activeElement.matches('.log-readings .entry')"
+    until("the first box of the reading", lambda: browser.run(first))
+    browser.keys(task["log_rpm"] + ENTER + "full" + ENTER)
+    cells(browser, "Factors found", 0, task["factors"])
+
+
+def cells(browser, table, column, wanted):
+    """Waits until a column of a table shows these figures."""
+    asked = """const rows = document.querySelectorAll(`[aria-label="${arguments[0]}"] tbody tr`);
+        return [...rows].map(row => row.querySelectorAll('td')[arguments[1]].textContent)"""
+    shown = lambda: browser.run(asked, table, column)
+    same = lambda texts: len(texts) == len(wanted) and all(map(near, texts, wanted))
+    try:
+        until(table, lambda: same(shown()))
+    except AssertionError:
+        raise AssertionError(f"{table}: shown {shown()}, computed {wanted}") from None
+
+
+def save(browser, folder):
+    """The file that the page offers is on the disk."""
+    press(browser, "Save")
+    written = lambda: [file for file in folder.glob("downloads/*.json") if file.stat().st_size > 0]
+    file = until("a file from the page", written)[0]
+    until("the whole file", lambda: file.read_text().endswith(("}", "}\n")))
+    shutil.copy(file, folder / "saved.json")
+
+
+def reopen(browser, folder, task):
+    """Another job, and the saved one over it."""
+    title = "return document.querySelector('input[aria-label=Title]').value"
+    press(browser, "Jobs")
+    press(browser, start="New: a plain two-blade propeller")
+    until("another job", lambda: browser.run(title) != task["title"])
+    browser.type("input[type=file]", str(folder / "saved.json"))
+    until("the saved job", lambda: browser.run(title) == task["title"])
+    shows(browser, task["station"], task["twisted"])
+
+
+def inches(browser, task):
+    """The diameter in inches; what is worked out stays as it was."""
+    press(browser, "in")
+    diameter = "return document.querySelector('input[aria-label=\"Diameter, in\"]')?.value || ''"
+    until("the diameter in inches", lambda: near(browser.run(diameter), task["diameter_m"] / INCH_M))
+    shows(browser, task["station"], task["twisted"])
