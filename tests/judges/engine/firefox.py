@@ -1,6 +1,7 @@
 """Firefox, driven by Mozilla's own client."""
 
 import base64
+import os
 import shutil
 
 ELEMENT = "css selector"
@@ -23,7 +24,7 @@ class Firefox:
             "browser.download.always_ask_before_handling_new_types": False,
             "browser.download.alwaysOpenPanel": False,
         }
-        self.client = Marionette(bin=program, headless=True, prefs=wanted)
+        self.client = Marionette(bin=program, headless=True, prefs=wanted, gecko_log=os.devnull)
         self.client.start_session()
         self.name = "{browserName} {browserVersion}".format(**self.client.session_capabilities)
 

@@ -24,6 +24,8 @@ async fn take_all(browser: &Browser, folder: &Path, whole: bool) -> Result<()> {
             browser.set_look(look).await?;
             browser.set_size(size).await?;
             let started_ms = browser.reload().await?;
+            let rests = async || Ok((!browser.text().await?.contains("Working out")).then_some(()));
+            browser.wait("everything on the page to be worked out", rests).await?;
             let file = folder.join(format!("{size_name}-{look_name}.png"));
             std::fs::write(&file, browser.picture(whole).await?)?;
             println!("{} (started in {started_ms:.0} ms)", file.display());
