@@ -316,7 +316,7 @@ pub struct StationResult {
     pub axial_factor: Option<f64>,
     /// `v/(Ω r)`.
     pub swirl_factor: Option<f64>,
-    /// Prandtl factor, tip times hub.
+    /// The factor F of the loss at tip and hub, their product.
     pub loss_factor: Option<f64>,
     /// Thrust per metre of radius, all blades, N/m.
     pub thrust_n_per_m: f64,
