@@ -38,7 +38,7 @@ impl Copy {
     ///
     /// # Errors
     /// Where files cannot be read or written, or the compiler refuses something that no mutant explains.
-    pub fn make(workspace: &Path, root: &Path, rooms: &[String]) -> Result<(Self, Vec<Mutant>)> {
+    pub fn make(workspace: &Path, root: &Path, rooms: &[&str]) -> Result<(Self, Vec<Mutant>)> {
         let listed = Command::new("git").args(["ls-files", "-z"]).current_dir(workspace).output()?;
         let names: Vec<String> = String::from_utf8(listed.stdout)?
             .split_terminator('\0')
@@ -152,7 +152,7 @@ impl Copy {
     }
 }
 
-fn in_rooms(name: &str, rooms: &[String]) -> bool {
+fn in_rooms(name: &str, rooms: &[&str]) -> bool {
     let inside = name.strip_prefix("core/src/").is_some_and(|rest| {
         rooms.iter().any(|room| rest.strip_prefix(room).is_some_and(|r| r.starts_with(['/', '.'])))
     });

@@ -8,9 +8,11 @@ mod copy;
 mod rewrite;
 mod run;
 
-use std::collections::{BTreeMap, HashMap};
+use std::collections::HashMap;
 use std::fs::OpenOptions;
+use std::num::ParseIntError;
 use std::path::{Path, PathBuf};
+use std::str::FromStr;
 use std::sync::Mutex;
 
 use anyhow::{Context, Result};
@@ -23,15 +25,13 @@ use crate::run::{Fate, Outcome, explore, judge};
 /// Changes the core's source in many small ways, one at a time, and tells which of them no test notices.
 #[derive(Parser)]
 struct Args {
-    /// Rooms of the core to change: folders or files below `core/src`, without their ending
+    /// Rooms of the core to change, one after the other: folders or files below `core/src`, without their
+    /// ending; `section/solver:150` runs on no more than 150 mutants, spread over the room
     #[arg(required = true)]
-    rooms: Vec<String>,
+    rooms: Vec<Room>,
     /// Folder for the copy of the workspace, what was built and `results.csv`; what is there is gone on with
     #[arg(long, default_value = "target/mutants")]
     folder: PathBuf,
-    /// Run on no more than so many mutants of each room, spread over it
-    #[arg(long)]
-    most: Option<usize>,
     /// Only where the mutant's file, line, column and change contain this
     #[arg(long, default_value = "")]
     only: String,
@@ -49,12 +49,30 @@ struct Args {
     jobs: usize,
 }
 
+/// A part of the core, with how many of its mutants to run.
+#[derive(Clone)]
+struct Room {
+    name: String,
+    most: usize,
+}
+
+impl FromStr for Room {
+    type Err = ParseIntError;
+
+    fn from_str(text: &str) -> Result<Self, ParseIntError> {
+        let (name, most) = text.split_once(':').unwrap_or((text, ""));
+        let most = if most.is_empty() { usize::MAX } else { most.parse()? };
+        Ok(Self { name: name.to_owned(), most })
+    }
+}
+
 fn main() -> Result<()> {
     let args = Args::parse();
     let workspace = Path::new(env!("CARGO_MANIFEST_DIR")).join("../..").canonicalize()?;
     let folder = workspace.join(&args.folder);
     std::fs::create_dir_all(&folder)?;
-    let (copy, mutants) = Copy::make(&workspace, &folder.join("copy"), &args.rooms)?;
+    let rooms: Vec<&str> = args.rooms.iter().map(|room| room.name.as_str()).collect();
+    let (copy, mutants) = Copy::make(&workspace, &folder.join("copy"), &rooms)?;
     let results = folder.join("results.csv");
     let mut known = read(&results)?;
     if args.again {
@@ -86,32 +104,33 @@ fn read(results: &Path) -> Result<HashMap<String, Outcome>> {
     rows.map(|row| row.map(|o: Outcome| (o.mutant.clone(), o)).context("results.csv")).collect()
 }
 
-/// The room a mutant belongs to: the longest that fits.
-fn room<'r>(mutant: &str, rooms: &'r [String]) -> &'r str {
-    let fits =
-        |room: &&String| mutant.strip_prefix("core/src/").is_some_and(|m| m.starts_with(room.as_str()));
-    rooms.iter().filter(fits).max_by_key(|room| room.len()).map_or("", String::as_str)
+/// The room a mutant belongs to: the one with the longest name that fits.
+fn room(mutant: &Mutant, rooms: &[Room]) -> usize {
+    let path = mutant.key.trim_start_matches("core/src/");
+    let fits = |i: &usize| path.starts_with(&rooms[*i].name);
+    (0..rooms.len()).filter(fits).max_by_key(|i| rooms[*i].name.len()).unwrap_or(0)
 }
 
-/// What is to be run: of each room the first so many in an order that has nothing to do with the source's.
+/// What is to be run: room by room, in each the first so many in an order that has nothing to do with the
+/// source's.
 fn wanted(args: &Args, mutants: &[Mutant], known: &HashMap<String, Outcome>) -> Vec<Mutant> {
     let scrambled = |m: &Mutant| m.number.wrapping_mul(2_654_435_761).rotate_left(16);
     let mut order: Vec<&Mutant> = mutants.iter().filter(|m| m.key.contains(&args.only)).collect();
-    order.sort_by_key(|m| scrambled(m));
-    let mut taken: BTreeMap<&str, usize> = BTreeMap::new();
+    order.sort_by_key(|m| (room(m, &args.rooms), scrambled(m)));
+    let mut taken = vec![0; args.rooms.len()];
     order.retain(|m| {
-        let count = taken.entry(room(&m.key, &args.rooms)).or_default();
-        *count += 1;
-        args.most.is_none_or(|most| *count <= most)
+        let i = room(m, &args.rooms);
+        taken[i] += 1;
+        taken[i] <= args.rooms[i].most
     });
     order.into_iter().filter(|m| !known.contains_key(&m.key)).cloned().collect()
 }
 
 /// Counts by room, and every mutant that no test noticed.
-fn tell(known: &HashMap<String, Outcome>, mutants: &[Mutant], rooms: &[String]) {
-    let mut counts: BTreeMap<&str, [usize; 5]> = BTreeMap::new();
+fn tell(known: &HashMap<String, Outcome>, mutants: &[Mutant], rooms: &[Room]) {
+    let mut counts = vec![[0; 5]; rooms.len()];
     for mutant in mutants {
-        let count = counts.entry(room(&mutant.key, rooms)).or_default();
+        let count = &mut counts[room(mutant, rooms)];
         count[0] += 1;
         let Some(outcome) = known.get(&mutant.key) else { continue };
         count[1 + outcome.fate as usize] += 1;
@@ -119,9 +138,8 @@ fn tell(known: &HashMap<String, Outcome>, mutants: &[Mutant], rooms: &[String]) 
             println!("{:?} ({} of {} tests) {}", outcome.fate, outcome.tried, outcome.reach, outcome.mutant);
         }
     }
-    for (room, [all, killed, hung, survived, unreached]) in counts {
-        println!(
-            "{room}: {all} mutants, {killed} killed, {hung} hung, {survived} survived, {unreached} unreached"
-        );
+    for (room, [all, killed, hung, survived, unreached]) in rooms.iter().zip(counts) {
+        let fates = format!("{killed} killed, {hung} hung, {survived} survived, {unreached} unreached");
+        println!("{}: {all} mutants, {fates}", room.name);
     }
 }
