@@ -58,7 +58,7 @@ fn looked_at(rig: &Rig, index: usize) -> Option<Condition> {
     Some(condition(rig, point, air).unwrap_or(still))
 }
 
-/// Every rpm at which offer and demand agree there; see [`crossings`].
+/// Every rpm at which offer and demand agree there; see [`crossings()`].
 #[must_use]
 pub fn offer_crossings(rig: &Rig, index: usize) -> Vec<Crossing> {
     looked_at(rig, index).map_or_else(Vec::new, |at| crossings(rig, &at))

@@ -92,7 +92,7 @@ impl Family {
     /// Makes a family ready for lookup.
     ///
     /// # Errors
-    /// What [`check_polars`] finds.
+    /// If the tables do not go together; the message says which and why.
     pub fn new(about: About, polars: &[Polar]) -> Result<Self, TableError> {
         check_polars(polars)?;
         let mut order: Vec<&Polar> = polars.iter().collect();

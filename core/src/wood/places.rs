@@ -6,7 +6,7 @@ use super::section::Shape;
 /// A radius at which stress is judged.
 #[derive(Clone, Debug)]
 pub struct Place {
-    /// Index into [`BladeBeam::radii_m`].
+    /// Index into [`BladeBeam::radii_m`](super::blade::BladeBeam::radii_m).
     pub index: usize,
     /// Index of the station in the job; `None` at the edge of the hub.
     pub station: Option<usize>,

@@ -4,6 +4,7 @@ use crate::report::Report;
 use crate::{needs, test_run};
 use anyhow::Result;
 use spokeshave_press::{Source, Workspace, build_page, run};
+use spokeshave_prove::tools;
 use std::time::{Duration, Instant};
 
 /// Sets up, then runs every check; a failing one does not keep the others from running.
@@ -24,6 +25,11 @@ pub(crate) fn everything() -> Result<Report> {
                 &["clippy", "--release", "--workspace", "--all-targets", "--", "--deny", "warnings"],
             )
         });
+        report.check("documentation", || {
+            let mut doc = workspace.cargo();
+            doc.args(["doc", "--release", "--workspace", "--no-deps"]);
+            run(doc.env("RUSTDOCFLAGS", "--deny warnings"))
+        });
         let compiled = timed(|| test_run::compile(&workspace));
         (page.join(), compiled)
     });
@@ -34,8 +40,15 @@ pub(crate) fn everything() -> Result<Report> {
         println!("{}: {} bytes", page.path.display(), page.bytes);
     }
     let page = page.map(|page| page.path);
+    let lost = tools::lost_browsers(&workspace.target);
+    if lost.exists() {
+        std::fs::remove_file(&lost)?;
+    }
     let tests = report.check("tests", || test_run::all(&workspace, page.as_deref()));
     report.tests(tests.flatten());
+    if lost.exists() {
+        report.remark(std::fs::read_to_string(&lost)?);
+    }
     Ok(report)
 }
 

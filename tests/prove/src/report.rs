@@ -17,6 +17,7 @@ pub(crate) struct Tests {
 pub(crate) struct Report {
     steps: Vec<Step>,
     tests: Option<Tests>,
+    remarks: String,
 }
 
 #[derive(Debug)]
@@ -50,6 +51,11 @@ impl Report {
         self.tests = tests;
     }
 
+    /// Notes what is worth knowing of a run that is clean nevertheless; ends with a line's end.
+    pub(crate) fn remark(&mut self, remark: String) {
+        self.remarks = remark;
+    }
+
     /// Whether everything passed.
     pub(crate) fn is_clean(&self) -> bool {
         let tests = self.tests.is_some_and(|tests| tests.passed > 0 && tests.failed == 0);
@@ -69,6 +75,7 @@ impl fmt::Display for Report {
                 writeln!(f, "{}: {error}", step.name)?;
             }
         }
+        write!(f, "{}", self.remarks)?;
         let Tests { passed, failed, ignored } = self.tests.unwrap_or_default();
         writeln!(f, "{passed} passed, {failed} failed, {ignored} skipped")
     }

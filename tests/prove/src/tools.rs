@@ -46,6 +46,12 @@ pub fn axe_script(target: &Path) -> PathBuf {
     target.join("axe").join(AXE_VERSION).join("node_modules/axe-core/axe.min.js")
 }
 
+/// Where it is noted which checks had to run again since their browser ended by itself.
+#[must_use]
+pub fn lost_browsers(target: &Path) -> PathBuf {
+    target.join("browser-failures").join("lost.txt")
+}
+
 /// What the judges of the bench's files are installed from.
 pub const JUDGES: &str = include_str!("../../judges/requirements.txt");
 

@@ -3,6 +3,8 @@
 use super::Desktop;
 use crate::tools;
 use anyhow::{Context, Result};
+use std::fs::File;
+use std::path::{Path, PathBuf};
 use std::process::Stdio;
 use tokio::io::{AsyncBufReadExt, BufReader};
 use tokio::process::{Child, Command};
@@ -12,11 +14,15 @@ use tokio::process::{Child, Command};
 pub(super) struct Driver {
     process: Child,
     pub(super) url: String,
+    /// What the driver and the browser say of faults of their own.
+    words: PathBuf,
 }
 
 impl Driver {
-    /// Starts the driver on a free port; the browsers it starts show their windows on the desktop.
-    pub(super) async fn start(desktop: Option<&Desktop>) -> Result<Self> {
+    /// Starts the driver on a free port; the browsers it starts show their windows on the desktop. What it and they say of
+    /// faults goes into `folder`.
+    pub(super) async fn start(desktop: Option<&Desktop>, folder: &Path) -> Result<Self> {
+        let words = folder.join("driver.txt");
         let program = tools::chromedriver()
             .context("chromedriver is missing: run `cargo prove`, or install the package chromium-driver")?;
         let mut command = Command::new(program);
@@ -24,10 +30,10 @@ impl Driver {
             command.env("DISPLAY", desktop.display());
         }
         let mut process = command
-            .arg("--port=0")
+            .args(["--port=0", "--enable-chrome-logs"])
             .stdin(Stdio::null())
             .stdout(Stdio::piped())
-            .stderr(Stdio::null())
+            .stderr(File::create(&words)?)
             .kill_on_drop(true)
             .spawn()?;
         let output = process.stdout.take().context("chromedriver has no output")?;
@@ -37,10 +43,17 @@ impl Driver {
                 // Read on, so that the driver never waits for a full pipe.
                 let url = format!("http://localhost:{}", port.1);
                 tokio::spawn(async move { while let Ok(Some(_)) = lines.next_line().await {} });
-                return Ok(Self { process, url });
+                return Ok(Self { process, url, words });
             }
         }
         anyhow::bail!("chromedriver ended without naming its port")
+    }
+
+    /// The last that driver and browser said of faults of their own.
+    pub(super) fn last_words(&self) -> String {
+        let said = std::fs::read_to_string(&self.words).unwrap_or_default();
+        let lines: Vec<&str> = said.lines().collect();
+        lines[lines.len().saturating_sub(20)..].join("\n")
     }
 
     /// Ends the driver.

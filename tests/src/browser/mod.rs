@@ -14,6 +14,7 @@ mod driver;
 mod effort;
 mod log;
 mod look;
+mod lost;
 mod page;
 mod session;
 mod setup;

@@ -2,7 +2,7 @@
 
 use super::desktop::Desktop;
 use super::driver::Driver;
-use super::{built_page, cdp, setup, target_folder};
+use super::{built_page, cdp, lost, setup, target_folder};
 use anyhow::{Context, Result};
 use fantoccini::{Client, ClientBuilder};
 use futures_util::FutureExt;
@@ -24,11 +24,12 @@ pub struct Browser {
     driver: Driver,
 }
 
-/// Runs a check in a browser of its own and ends the browser whatever happens.
+/// Runs a check in a browser of its own and ends the browser whatever happens. Where the browser came to an end by
+/// itself in the middle of it, once more in a new one.
 ///
 /// # Errors
 /// What the check returns, or that no browser could be started.
-pub async fn drive(name: &str, check: impl AsyncFnOnce(&Browser) -> Result<()>) -> Result<()> {
+pub async fn drive<T>(name: &str, check: impl AsyncFn(&Browser) -> Result<T>) -> Result<T> {
     drive_on(None, name, check).await
 }
 
@@ -36,19 +37,47 @@ pub async fn drive(name: &str, check: impl AsyncFnOnce(&Browser) -> Result<()>) 
 ///
 /// # Errors
 /// What the check returns, or that no browser could be started.
-pub async fn drive_on(
+pub async fn drive_on<T>(
     desktop: Option<&Desktop>,
     name: &str,
-    check: impl AsyncFnOnce(&Browser) -> Result<()>,
-) -> Result<()> {
+    check: impl AsyncFn(&Browser) -> Result<T>,
+) -> Result<T> {
+    match attempt(desktop, name, &check).await? {
+        Ended::Gave(value) => return Ok(value),
+        Ended::Gone(words) => lost::note(name, &words)?,
+    }
+    match attempt(desktop, name, &check).await? {
+        Ended::Gave(value) => Ok(value),
+        Ended::Gone(words) => anyhow::bail!("the browser ended by itself, twice: {words}"),
+    }
+}
+
+/// How a check came to its end without failing.
+enum Ended<T> {
+    /// With what it is to give.
+    Gave(T),
+    /// The browser ended by itself, with the last it said.
+    Gone(String),
+}
+
+async fn attempt<T>(
+    desktop: Option<&Desktop>,
+    name: &str,
+    check: &impl AsyncFn(&Browser) -> Result<T>,
+) -> Result<Ended<T>> {
     let browser = Browser::start_on(desktop).await?;
     let outcome = AssertUnwindSafe(check(&browser)).catch_unwind().await;
-    if !matches!(outcome, Ok(Ok(()))) {
+    let failed = !matches!(outcome, Ok(Ok(_)));
+    let gone = failed && browser.is_gone().await;
+    if failed && !gone {
         browser.leave_picture(name).await;
     }
+    let words = browser.driver.last_words();
     browser.close().await;
     match outcome {
-        Ok(result) => result,
+        Ok(Ok(value)) => Ok(Ended::Gave(value)),
+        _ if gone => Ok(Ended::Gone(words)),
+        Ok(Err(error)) => Err(error),
         Err(panic) => std::panic::resume_unwind(panic),
     }
 }
@@ -69,10 +98,15 @@ impl Browser {
     pub async fn start_on(desktop: Option<&Desktop>) -> Result<Self> {
         let folder = TempDir::new()?;
         let capabilities = setup::capabilities(folder.path(), desktop)?;
-        let driver = Driver::start(desktop).await?;
+        let driver = Driver::start(desktop, folder.path()).await?;
         let mut client = ClientBuilder::new(HttpConnector::new());
         let client = client.capabilities(capabilities).connect(&driver.url).await?;
         Ok(Self { client, folder, driver })
+    }
+
+    /// Whether the browser itself, not only a page in it, is there no more.
+    async fn is_gone(&self) -> bool {
+        self.client.windows().await.is_err()
     }
 
     /// Ends the browser, then its driver.
