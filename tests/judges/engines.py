@@ -15,8 +15,11 @@ from engine.firefox import Firefox
 from engine.webkit import WebKit
 
 WIDE_PX = (1440, 900)
-# What is looked at where the environment does not say; the rest takes too long for every run of the checks.
-USUAL = "job,light and dark,motion"
+# What is looked at where the environment does not say: between them every subject, each once where once is enough.
+USUAL = {
+    "firefox": "job,light and dark,motion,keyboard,forced colours,paper",
+    "webkit": "job,light and dark,motion,phone",
+}
 
 
 def quiet(browser):
@@ -62,7 +65,7 @@ def main(engine, file):
     browser = {"firefox": Firefox, "webkit": WebKit}[engine](str(folder / "downloads"))
     try:
         browser.resize(*WIDE_PX)
-        wanted = os.environ.get("SPOKESHAVE_ENGINES", USUAL)
+        wanted = os.environ.get("SPOKESHAVE_ENGINES", USUAL[engine])
         chosen = [s for s in subjects(browser, asked, folder) if wanted == "all" or s[0] in wanted.split(",")]
         faults = [name for name, look_at in chosen if not holds(browser, name, look_at)]
     finally:

@@ -8,7 +8,7 @@ use crate::tunnel::MEASURED;
 use super::{section, tip_loss, tunnel};
 
 /// Size of one chart, px.
-const SIZE: (u32, u32) = (760, 460);
+const SIZE: (u32, u32) = (560, 400);
 const COLOURS: [RGBColor; 4] =
     [RGBColor(0, 90, 160), RGBColor(190, 60, 0), RGBColor(0, 120, 70), RGBColor(120, 40, 140)];
 
@@ -36,7 +36,7 @@ pub(super) const CAPTIONS: [(&str, &str); 4] = [
     ),
 ];
 
-/// One curve: name, points, whether dots.
+/// One curve: name (none: left out of the key), points, whether dots.
 struct Curve {
     name: String,
     points: Vec<(f64, f64)>,
@@ -61,16 +61,13 @@ pub(super) fn all() -> [(&'static str, String); 4] {
 
 fn wind_tunnel() -> String {
     let answers = [
-        (&tunnel::PHOTOGRAPHED, "quiet air", 1.0),
-        (&tunnel::DISTURBED, "disturbed air", 0.45),
-        (&tunnel::DRAWN, "angle of the drawing", 0.2),
+        (&tunnel::PHOTOGRAPHED, ["CT computed", "CP computed"], 1.0),
+        (&tunnel::DISTURBED, [""; 2], 0.45),
+        (&tunnel::DRAWN, [""; 2], 0.2),
     ];
-    let lines = answers.iter().flat_map(|(answer, name, strength)| {
+    let lines = answers.iter().flat_map(|(answer, names, strength)| {
         let of = |pick: fn(&(f64, f64, f64)) -> (f64, f64)| answer.moving.iter().map(pick).collect();
-        [
-            line(format!("CT, {name}"), 0, *strength, of(|p| (p.0, p.1))),
-            line(format!("CP, {name}"), 1, *strength, of(|p| (p.0, p.2))),
-        ]
+        [line(names[0], 0, *strength, of(|p| (p.0, p.1))), line(names[1], 1, *strength, of(|p| (p.0, p.2)))]
     });
     let measured = [
         dots("CT measured", 0, MEASURED.iter().map(|m| (m.0, m.1)).collect()),
@@ -155,36 +152,38 @@ fn draw<'a>(
     root.fill(&WHITE)?;
     let mut chart = ChartBuilder::on(&root)
         .margin(12)
-        .x_label_area_size(40)
-        .y_label_area_size(60)
+        .x_label_area_size(46)
+        .y_label_area_size(70)
         .build_cartesian_2d(x, y)?;
     chart
         .configure_mesh()
         .x_desc(axes[0])
         .y_desc(axes[1])
         .light_line_style(TRANSPARENT)
-        .label_style(("sans-serif", 14))
+        .label_style(("sans-serif", 18))
         .draw()?;
     for curve in curves {
         let (colour, points) = (curve.colour, curve.points.clone());
-        if curve.dots {
-            let series = points.into_iter().map(|p| Circle::new(p, 4, colour.filled()));
-            chart
-                .draw_series(series)?
-                .label(&curve.name)
-                .legend(move |(x, y)| Circle::new((x + 10, y), 4, colour.filled()));
+        let drawn = if curve.dots {
+            chart.draw_series(points.into_iter().map(|p| Circle::new(p, 4, colour.filled())))?
         } else {
-            chart
-                .draw_series(LineSeries::new(points, colour.stroke_width(2)))?
-                .label(&curve.name)
-                .legend(move |(x, y)| PathElement::new([(x, y), (x + 20, y)], colour.stroke_width(2)));
+            chart.draw_series(LineSeries::new(points, colour.stroke_width(2)))?
+        };
+        if curve.name.is_empty() {
+            continue;
+        }
+        drawn.label(&curve.name);
+        if curve.dots {
+            drawn.legend(move |(x, y)| Circle::new((x + 10, y), 4, colour.filled()));
+        } else {
+            drawn.legend(move |(x, y)| PathElement::new([(x, y), (x + 20, y)], colour.stroke_width(2)));
         }
     }
     chart
         .configure_series_labels()
         .position(key)
         .background_style(WHITE.mix(0.8))
-        .label_font(("sans-serif", 13))
+        .label_font(("sans-serif", 17))
         .draw()?;
     root.present()
 }

@@ -8,6 +8,7 @@ use spokeshave::section::Family;
 use yew::prelude::*;
 
 use super::form::{Labelled, Pick, Shown, Switch};
+use super::trust::trust;
 use super::{Act, Seen, use_act};
 use crate::app::RigRef;
 use crate::number::{fixed, significant};
@@ -46,38 +47,6 @@ pub fn MethodPanel(props: &MethodPanelProps) -> Html {
                 <Outside point={props.point.clone()} />
             </div>
             { trust() }
-        </div>
-    }
-}
-
-/// Every check against something outside the program, counted by part; written by the tests.
-const CHECKS: &str = include_str!("../../../tests/validation/summary.tsv");
-
-/// How far to trust it: what was compared, and what misses.
-fn trust() -> Html {
-    let rows: Vec<Vec<&str>> = CHECKS.lines().map(|line| line.split('\t').collect()).collect();
-    let parts = rows.iter().filter_map(|row| match row[..] {
-        [part, all, hold] => {
-            Some(html! { <tr><th scope="row">{ part }</th><td>{ all }</td><td>{ hold }</td></tr> })
-        }
-        _ => None,
-    });
-    let misses = rows.iter().filter_map(|row| match row[..] {
-        [what, reason] => Some(html! { <li>{ what }<small>{ format!(" – {reason}.") }</small></li> }),
-        _ => None,
-    });
-    html! {
-        <div class="trust">
-            <h3>{ "How far to trust it" }</h3>
-            <p class="note">
-                { "What it computes beside what measurements, closed forms and independent programs say; the list of all with sources and tolerances \
-                   is kept with the program’s sources. A tested figure is no proof that a blade holds or flies." }
-            </p>
-            <table class="sheet-table">
-                <thead><tr><th scope="col">{ "Part" }</th><th scope="col">{ "Compared" }</th><th scope="col">{ "Within tolerance" }</th></tr></thead>
-                <tbody>{ for parts }</tbody>
-            </table>
-            <details><summary>{ "What misses, and why" }</summary><ul>{ for misses }</ul></details>
         </div>
     }
 }

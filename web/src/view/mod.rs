@@ -26,6 +26,7 @@ pub mod room;
 pub mod sections;
 pub mod shape;
 pub mod steps;
+mod trust;
 pub mod units;
 pub mod verdict;
 pub mod workshop;
