@@ -9,6 +9,7 @@ mod rewrite;
 mod run;
 
 use std::collections::HashMap;
+use std::collections::hash_map::Entry;
 use std::fs::OpenOptions;
 use std::num::ParseIntError;
 use std::path::{Path, PathBuf};
@@ -41,6 +42,9 @@ struct Args {
     /// Run the checks against published values too: a longer build
     #[arg(long)]
     outside: bool,
+    /// Only tests with this in their name; those they leave alive another run can go on with
+    #[arg(long, default_value = "")]
+    by: String,
     /// Seconds of tests on each mutant, as they take without one; a test that takes longer is left out
     #[arg(long, default_value_t = 20.0)]
     seconds: f64,
@@ -81,7 +85,7 @@ fn main() -> Result<()> {
     let wanted = wanted(&args, &mutants, &known);
     eprintln!("{} mutants, {} to run; building the tests", mutants.len(), wanted.len());
     let programs = copy.tests(args.outside)?;
-    let tests = explore(&programs, &folder, (args.jobs, args.seconds))?;
+    let tests = explore(&programs, &args.by, &folder, (args.jobs, args.seconds))?;
     eprintln!("{} tests end within {} s", tests.len(), args.seconds);
     let file = OpenOptions::new().append(true).create(true).open(&results)?;
     let headed = file.metadata()?.len() == 0;
@@ -95,13 +99,21 @@ fn main() -> Result<()> {
     Ok(())
 }
 
-/// The results so far by mutant; the last of each counts.
+/// The results so far by mutant: of each what most is known of, that it died, else that some tests let it live.
 fn read(results: &Path) -> Result<HashMap<String, Outcome>> {
+    let mut known: HashMap<String, Outcome> = HashMap::new();
     if !results.exists() {
-        return Ok(HashMap::new());
+        return Ok(known);
     }
-    let rows = csv::Reader::from_path(results)?.into_deserialize();
-    rows.map(|row| row.map(|o: Outcome| (o.mutant.clone(), o)).context("results.csv")).collect()
+    for row in csv::Reader::from_path(results)?.into_deserialize() {
+        let row: Outcome = row.context("results.csv")?;
+        match known.entry(row.mutant.clone()) {
+            Entry::Vacant(place) => drop(place.insert(row)),
+            Entry::Occupied(mut place) if row.fate <= place.get().fate => drop(place.insert(row)),
+            Entry::Occupied(_) => {}
+        }
+    }
+    Ok(known)
 }
 
 /// The room a mutant belongs to: the one with the longest name that fits.

@@ -28,8 +28,8 @@ pub struct Test<'a> {
     reached: HashSet<u32>,
 }
 
-/// What became of a mutant.
-#[derive(Debug, Clone, Copy, PartialEq, Eq, Serialize, Deserialize)]
+/// What became of a mutant, in the order of what is known then.
+#[derive(Debug, Clone, Copy, PartialEq, Eq, PartialOrd, Ord, Serialize, Deserialize)]
 #[serde(rename_all = "lowercase")]
 pub enum Fate {
     /// A test failed.
@@ -85,12 +85,13 @@ fn run(program: &Program, name: &str, most_seconds: f64, (key, value): (&str, &s
     })
 }
 
-/// Every test of the programs that ends within `most_seconds`, with its time and the mutants it reaches.
+/// Every test of the programs with `by` in its name that ends within `most_seconds`, with its time and the mutants it reaches.
 ///
 /// # Errors
 /// Where a program cannot be run or a test fails without a mutant.
 pub fn explore<'a>(
     programs: &'a [Program],
+    by: &str,
     scratch: &Path,
     (jobs, most_seconds): (usize, f64),
 ) -> Result<Vec<Test<'a>>> {
@@ -98,7 +99,7 @@ pub fn explore<'a>(
     for program in programs {
         let listed = Command::new(&program.file).args(["--list", "--format", "terse"]).output()?;
         let listed = String::from_utf8(listed.stdout)?;
-        let names = listed.lines().filter_map(|l| l.strip_suffix(": test"));
+        let names = listed.lines().filter_map(|l| l.strip_suffix(": test")).filter(|name| name.contains(by));
         all.extend(names.map(|name| (program, name.to_owned())));
     }
     let tests = Mutex::new(Vec::new());
