@@ -176,3 +176,54 @@ fn on_shipped_tables_a_neighbour_leads_to_the_same_root_in_half_the_lookups() {
     println!("{cold} lookups, {warm} from a neighbour");
     assert!(2 * warm < cold, "{warm} of {cold}");
 }
+
+/// What the residual was made of, put together anew from the balance it led to: momentum theory with drag in both equations, and
+/// CT = 8/9 + (4 F − 40/9) a + (50/9 − 4 F) a² (M. L. Buhl, NREL/TP-500-36834, 2005; from memory) in the windmill brake state.
+#[test]
+fn at_every_balance_the_air_takes_up_what_the_blade_gives() {
+    let family = plate_polar();
+    let mut runner = proptest::test_runner::TestRunner::deterministic();
+    let mut counts = [0; 3];
+    for _ in 0..6000 {
+        let e = element(&family, situations().new_tree(&mut runner).unwrap().current());
+        let Some(b) = e.balance() else { continue };
+        let (through, around) = (e.axial_m_s + b.induced_axial_m_s, e.turning_m_s - b.induced_swirl_m_s);
+        let square = b.speed_m_s.powi(2);
+        assert!((through.hypot(around) / b.speed_m_s - 1.0).abs() < 1e-9, "{b:?}");
+        assert!((through.atan2(around) - b.inflow_rad).abs() < 1e-9, "{b:?}");
+        let (cn, ct) = b.normal_and_tangential();
+        let (push, twist) = (e.solidity * cn * square, e.solidity * ct * square);
+        let taken = 4.0 * b.loss * through.abs();
+        let scale = square + e.axial_m_s.powi(2);
+        assert!((twist - taken * b.induced_swirl_m_s).abs() < 1e-7 * scale, "{b:?}");
+        if b.windmill_brake {
+            let (v, f) = (e.axial_m_s, b.loss);
+            let a = -b.induced_axial_m_s / v;
+            let wanted = 8.0 / 9.0 + (4.0 * f - 40.0 / 9.0) * a + (50.0 / 9.0 - 4.0 * f) * a * a;
+            assert!(a > 1.0 / 3.0, "{a}");
+            assert!((-push / (v * v) - wanted).abs() * v * v < 1e-7 * scale, "{b:?} {wanted}");
+        } else {
+            assert!((push - taken * b.induced_axial_m_s).abs() < 1e-7 * scale, "{b:?}");
+        }
+        counts[usize::from(b.windmill_brake) + 2 * usize::from(through < 0.0)] += 1;
+    }
+    assert!(counts.iter().all(|n| *n > 50), "{counts:?}");
+}
+
+/// A blade set to push backwards turns the flow round while the air comes slowly, and brakes it where it comes fast.
+#[test]
+fn the_flow_turns_round_up_to_the_speed_at_which_the_blade_holds_it() {
+    let family = plate_polar();
+    for (angle, solidity) in [(-10.0, 0.1), (-7.0, 0.3), (-20.0, 0.05)] {
+        let inflow = |v: f64| {
+            let e = element(&family, (v, 100.0, angle, solidity, Ends::new(2.0, 0.7, 1.0, 0.15, true)));
+            e.balance().map(|b| b.inflow_rad).unwrap()
+        };
+        let cl = element(&family, (1.0, 100.0, angle, solidity, Ends::new(2.0, 0.7, 1.0, 0.15, true)));
+        let held = 100.0 * (0.5 * solidity * -cl.section.at(angle.to_radians()).cl).sqrt();
+        assert!(inflow(0.0) < 0.0 && inflow(0.99 * held) < 0.0, "{angle} {held}");
+        assert!(inflow(1.01 * held) > 0.0 && inflow(3.0 * held) > 0.0, "{angle} {held}");
+    }
+    let still = element(&family, (0.0, 100.0, 10.0, 0.1, Ends::new(2.0, 0.7, 1.0, 0.15, true)));
+    assert!(still.balance().unwrap().inflow_rad > 0.0);
+}
