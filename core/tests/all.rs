@@ -18,6 +18,7 @@ mod cli_carved;
 mod cli_fit;
 mod cli_logbook;
 mod cli_polar;
+mod cli_readme;
 mod cli_report;
 mod cli_shape;
 mod cli_strength;

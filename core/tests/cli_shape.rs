@@ -87,3 +87,15 @@ fn a_chart_is_told_for_people_and_for_programs() {
     assert_eq!(o.status.code(), Some(2));
     assert!(err(&o).contains("--figure: nope; allowed are efficiency, speed, climb"), "{}", err(&o));
 }
+
+#[test]
+fn what_an_error_costs_is_told_for_people_and_for_programs() {
+    let text = out(&shape(&["error", "--angle-deg", "0.4"]));
+    assert!(text.contains("±0.4°") && text.contains("Cruise"), "{text}");
+    let json: Value = serde_json::from_str(&out(&shape(&["error", "--angle-deg", "0.4", "--json"]))).unwrap();
+    assert_eq!(json["tolerance"]["angle_deg"], 0.4);
+    assert_eq!(json["radii_m"].as_array().map(Vec::len), Some(11));
+    let below = shape(&["error", "--angle-deg", "-1"]);
+    assert_eq!(below.status.code(), Some(2));
+    assert!(err(&below).contains("angle: -1; allowed is a tolerance of 0 to 1000"), "{}", err(&below));
+}

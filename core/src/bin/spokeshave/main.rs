@@ -22,7 +22,7 @@ mod vary;
 
 use std::process::ExitCode;
 
-use clap::{Parser, Subcommand};
+use clap::{CommandFactory, FromArgMatches, Parser, Subcommand};
 
 /// Fits a propeller to one aircraft and engine, and shows how far each station departs from its best angle.
 #[derive(Parser)]
@@ -88,8 +88,15 @@ enum Command {
     Schema,
 }
 
+/// With numbers below zero taken for numbers, so that each option says what it allows.
+fn taking_numbers(command: clap::Command) -> clap::Command {
+    command.allow_negative_numbers(true).mut_subcommands(taking_numbers)
+}
+
 fn main() -> ExitCode {
-    let outcome = match Cli::parse().command {
+    let given = taking_numbers(Cli::command()).get_matches();
+    let cli = Cli::from_arg_matches(&given).unwrap_or_else(|e| e.exit());
+    let outcome = match cli.command {
         Command::Analyse(args) => analyse::run(&args),
         Command::Fit(args) => fit::run(&args),
         Command::Shape(args) => shape::run(&args),

@@ -15,7 +15,7 @@ use spokeshave::result::Compared;
 use spokeshave::shape::{ShapeError, Shaped};
 
 use crate::briefs::briefs;
-use crate::input::{JobSource, Outcome, print, print_json};
+use crate::input::{JobSource, Outcome, Stop, print, print_json};
 
 /// Strength is not judged by any of these commands; see to it by a proven practice or a calculation before such a blade is run.
 #[derive(clap::Args)]
@@ -73,7 +73,7 @@ fn told<T: Serialize>(
 ) -> Outcome {
     let shaped = match shaped {
         Ok(shaped) => shaped,
-        Err(e) => return Ok(no_answer(&e)),
+        Err(e) => return refused(&e),
     };
     if how.job {
         print(&variant(shaped.job, suffix).to_json())?;
@@ -85,10 +85,14 @@ fn told<T: Serialize>(
     Ok(true)
 }
 
-/// On standard error, so that what is piped on stays a document.
-fn no_answer(e: &ShapeError) -> bool {
+/// A figure that is not allowed is bad input; what else cannot be has no answer, which goes to standard error, so that what is
+/// piped on stays a document.
+fn refused(e: &ShapeError) -> Outcome {
+    if matches!(e, ShapeError::Figure { .. }) {
+        return Err(Stop::bad(e));
+    }
     eprintln!("spokeshave: no answer: {e}");
-    false
+    Ok(false)
 }
 
 /// The shaped job by a title of its own.

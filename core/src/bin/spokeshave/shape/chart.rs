@@ -5,7 +5,7 @@ use spokeshave::rig::Rig;
 use spokeshave::shape::{self, MOST_CHART_STEPS, PitchBy};
 
 use super::figures::{NAMES, Words, figure_named, words};
-use super::no_answer;
+use super::refused;
 use super::wishes::LimitArgs;
 use crate::input::{Outcome, Stop, point_index, print, print_csv, print_json};
 use crate::table::{csv_figure, figure, table, word};
@@ -53,7 +53,7 @@ pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
         Ok(chart) if args.json => print_json(&chart)?,
         Ok(chart) if args.csv => print_csv(&HEADER, rows(&chart))?,
         Ok(chart) => print(&text(&chart, shown))?,
-        Err(e) => return Ok(no_answer(&e)),
+        Err(e) => return refused(&e),
     }
     Ok(true)
 }

@@ -5,7 +5,7 @@ use spokeshave::rig::Rig;
 use spokeshave::shape;
 
 use super::figures::{Words, words};
-use super::no_answer;
+use super::refused;
 use crate::input::{Outcome, print, print_json};
 use crate::table::{figure, signed, table};
 
@@ -42,7 +42,7 @@ pub(super) fn run(rig: &Rig, args: &Args) -> Outcome {
     match shape::error_costs(rig, tolerance) {
         Ok(costs) if args.json => print_json(&costs)?,
         Ok(costs) => print(&text(&costs))?,
-        Err(e) => return Ok(no_answer(&e)),
+        Err(e) => return refused(&e),
     }
     Ok(true)
 }
