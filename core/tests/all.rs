@@ -35,3 +35,4 @@ mod properties_shape;
 mod search;
 mod shape;
 mod strength;
+mod twin;

@@ -289,3 +289,29 @@ fn where_engine_and_propeller_agree_more_than_once_the_highest_stable_rpm_counts
     let [chosen] = chosen[..] else { panic!("one is chosen: {found:?}") };
     assert!((chosen / rig.point(0).unwrap().rpm.unwrap() - 1.0).abs() < 1e-6);
 }
+
+#[test]
+fn the_roll_is_that_of_thrust_less_drag_and_friction_step_by_step_in_time() {
+    let job = demo(0);
+    let rig = Rig::new(&job).unwrap();
+    let found = range(&job, 60);
+    let t = take_off(&rig, &found).unwrap();
+    let known: Vec<(f64, f64)> =
+        found.points.iter().filter_map(|p| Some((p.airspeed_m_s, p.full.as_ref()?.thrust_n))).collect();
+    let thrust = |v: f64| {
+        let i = known.partition_point(|p| p.0 <= v).clamp(1, known.len() - 1);
+        let (a, b) = (known[i - 1], known[i]);
+        a.1 + (b.1 - a.1) * (v - a.0) / (b.0 - a.0)
+    };
+    let (mut v, mut way, mut time) = (0.0, 0.0, 0.0);
+    let step = 1e-3;
+    while v < t.lift_off_m_s {
+        let net = thrust(v) - 0.5 * 1.225 * v * v * 11.5 * 0.034 - t.rolling_friction * 430.0 * 9.806_65;
+        let faster = v + step * net / 430.0;
+        way += 0.5 * (v + faster) * step;
+        time += step;
+        v = faster;
+    }
+    assert!((t.ground_roll_m / way - 1.0).abs() < 2e-3, "{t:?} {way}");
+    assert!((t.ground_roll_s / time - 1.0).abs() < 2e-3, "{t:?} {time}");
+}
