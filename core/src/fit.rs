@@ -103,7 +103,7 @@ pub fn throttle_condition(rig: &Rig, at: &Condition, throttle: f64) -> Result<Co
 pub struct Spare {
     /// Of its rpm limit, as a share of it; below zero is past it.
     pub rpm_share: f64,
-    /// Of power at this rpm, or at the limit where that is past it, as a share of what is taken; below zero is short.
+    /// Of the power it gives, as a share of what is taken; below zero is short.
     pub power_share: f64,
     /// Greatest propeller rpm.
     pub highest_rpm: f64,
@@ -116,9 +116,9 @@ pub struct Spare {
 pub fn spare(rig: &Rig, at: &Condition, taken_w: f64) -> Option<Spare> {
     let shaft = rig.shaft.as_ref()?;
     let (rpm, highest_rpm) = (rpm_of(at), highest_rpm(shaft));
-    let here_w = shaft.power_w(rpm.min(highest_rpm), &at.air, 1.0).max(0.0);
-    let given_w = if rpm > highest_rpm { greatest_w(shaft, at, highest_rpm) } else { here_w };
-    let power_share = (here_w - taken_w) / taken_w.max(1e-9);
+    let here_w = || shaft.power_w(rpm, &at.air, 1.0).max(0.0);
+    let given_w = if rpm > highest_rpm { greatest_w(shaft, at, highest_rpm) } else { here_w() };
+    let power_share = (given_w - taken_w) / taken_w.max(1e-9);
     Some(Spare { rpm_share: 1.0 - rpm / highest_rpm, power_share, highest_rpm, given_w })
 }
 

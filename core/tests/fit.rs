@@ -2,9 +2,11 @@
 
 use spokeshave::air::Air;
 use spokeshave::aircraft::drag_n;
-use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, Setting};
+use spokeshave::fit::spare;
+use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, PowerPoint, Setting};
 use spokeshave::result::{Limit, Note, PointResult, State};
-use spokeshave::rig::Rig;
+use spokeshave::rig::{Rig, air_of};
+use spokeshave::rotor::Condition;
 use spokeshave::shape::{brief, kept};
 
 fn demo(index: usize) -> Job {
@@ -172,4 +174,37 @@ fn a_multirotor_too_heavy_to_hover_is_told_by_how_much() {
     assert!(power.share < 0.0);
     assert!(Rig::new(&demo(2)).unwrap().fit(0, 20).unwrap().envelope.hover_short_n().is_none());
     assert!(Rig::new(&demo(0)).unwrap().fit(0, 20).unwrap().envelope.hover_n().is_none());
+}
+
+/// An engine whose power falls before its limit: past the limit, and at the end of its power, each figure is told on its own side of what
+/// bounds it.
+#[test]
+fn a_limit_is_broken_exactly_where_its_figures_say_so() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(engine)) = &mut job.engine else { panic!("a piston engine") };
+    engine.full_throttle.push(PowerPoint { rpm: 3400.0, power_w: 20_000.0 });
+    engine.max_rpm = Some(3350.0);
+    for rpm in [2600.0, 3300.0, 3350.0, 3360.0, 3600.0] {
+        job.flight_points[2].setting = Setting::Rpm { rpm };
+        let rig = Rig::new(&job).unwrap();
+        let told =
+            kept(&rig).into_iter().filter(|m| matches!(m.limit, Limit::EnginePower | Limit::EngineRpm));
+        for m in told {
+            let (found, allowed) = (m.found.unwrap(), m.allowed.unwrap());
+            assert_eq!(m.share < 0.0, found > allowed, "{rpm}: {m:?}");
+        }
+    }
+    let spared = |rpm: f64, taken_w: f64| {
+        let rig = Rig::new(&job).unwrap();
+        let air = air_of(&job.flight_points[2]).unwrap();
+        let turning = rpm * std::f64::consts::TAU / 60.0;
+        let at = Condition { air, airspeed_m_s: 40.0, rotation_rad_s: turning, turn_rad: 0.0 };
+        let given = rig.shaft.as_ref().unwrap().power_w(rpm, &air, 1.0);
+        (spare(&rig, &at, taken_w).unwrap(), given)
+    };
+    let (here, given) = spared(2600.0, 30_000.0);
+    assert!(
+        (here.power_share - (given / 30_000.0 - 1.0)).abs() < 1e-12 && (here.given_w - given).abs() < 1e-9
+    );
+    assert!((here.rpm_share - (1.0 - 2600.0 / 3350.0)).abs() < 1e-12, "{here:?}");
 }

@@ -10,7 +10,7 @@ mod variant;
 use roots::{SimpleConvergency, find_root_brent};
 use thiserror::Error;
 
-use crate::engine::Shaft;
+use crate::fit::highest_rpm;
 use crate::job::FlightPoint;
 use crate::result::{Brief, Change, Compared, Figure, Means};
 use crate::rig::Rig;
@@ -107,12 +107,14 @@ fn check(rig: &Rig, point: &FlightPoint, wanted: &Wanted) -> Result<(), ChangeEr
         }
         _ => {}
     }
-    let limit = rig.shaft.as_ref().and_then(Shaft::limit_rpm);
+    let limit = rig.shaft.as_ref().map(highest_rpm);
     let (name, allowed, span) = match (wanted.figure, limit) {
         (Figure::AirspeedMS, _) => ("airspeed", "1 to 340 m/s".into(), 1.0..=340.0),
-        (_, Some(limit)) => {
-            ("rpm", format!("10 to {limit:.0}, the limit of the engine at the propeller"), 10.0..=limit)
-        }
+        (_, Some(limit)) => (
+            "rpm",
+            format!("10 to {limit:.0}, the most the engine may turn or has a power for, at the propeller"),
+            10.0..=limit,
+        ),
         (_, None) => ("rpm", "10 to 100000".into(), 10.0..=100_000.0),
     };
     if span.contains(&wanted.value) {

@@ -56,8 +56,8 @@ impl Solver<'_> {
         let shaft = self.rig.shaft.as_ref()?;
         let full = self.at_limit(at)?;
         let taken_w = power_w(&full.loads, &full.condition);
-        let offered_w = shaft.available_w(highest_rpm(shaft), &at.air);
-        let past = offered_w.is_none_or(|offered_w| taken_w < offered_w);
+        let offered_w = shaft.available_w(highest_rpm(shaft), &at.air).unwrap_or(0.0);
+        let past = taken_w < offered_w;
         past.then_some(if taken_w > 0.0 { Ok(full) } else { Err(State::OverLimitRpm) })
     }
 
