@@ -31,7 +31,7 @@ const LEAST_CUT_M: f64 = 0.1e-3;
 const CHORD_WEIGHT_RAD: f64 = 0.7 / 5.7;
 /// Steps in which the turn is weighed, each leaving two thirds.
 const THIRDS: u32 = 40;
-/// Least Prandtl factor at which the wanted angle is solved; nearer to the ends it is the drawn one.
+/// Least factor of tip and hub at which the wanted angle is solved; nearer to the ends it is the drawn one.
 const LEAST_FACTOR: f64 = 0.35;
 
 /// The flight point a plan is judged at without one named: the first in flight that has an answer, else the first that has one.

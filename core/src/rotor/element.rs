@@ -1,7 +1,7 @@
 //! One element of the blade in balance: the inflow angle at which blade forces and momentum agree.
 //!
 //! With `W sin φ = V + u`, `W cos φ = Ω r − v`, `α = β − φ`, `cn = cl cos φ − cd sin φ`, `ct = cl sin φ + cd cos φ` and
-//! `σ = B c/(2π r)`, momentum with Prandtl's factor F and drag included in both equations is
+//! `σ = B c/(2π r)`, momentum with the factor F of tip and hub and drag included in both equations is
 //! `dT/dr = 4π r ρ F |V + u| u`, `dQ/dr = 4π r² ρ F |V + u| v`. Eliminating W leaves one residual in φ without a singular
 //! denominator (the idea of S. A. Ning, Wind Energy 17(9), 2014, and of his 2021 form for the static case):
 //!
@@ -85,7 +85,7 @@ pub struct Element<'f> {
     pub angle_rad: f64,
     /// Local solidity `B c/(2π r)`.
     pub solidity: f64,
-    /// Geometry of Prandtl's loss.
+    /// Geometry of the loss at tip and hub.
     pub ends: Ends,
     /// The section.
     pub section: Blend<'f>,
@@ -131,7 +131,7 @@ const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
 /// The most that the momentum terms of N (times sin 2φ) and of M rise or fall with φ, 1/rad: `4 F` and `4 F cos 2φ`, and what Prandtl's
-/// factor adds where it changes fastest, at `f = 0.8` of both ends.
+/// factor adds where it changes fastest, at `f = 0.8` of both ends; with Goldstein's the tests hold it to the fine scan too.
 ///
 /// With the most that the section's part can rise they bound the march's steps. The windmill brake state may break that bound: a pair of
 /// roots that close together is then passed over, as by a fixed step. The tests count how often against a fine scan.

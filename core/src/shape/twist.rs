@@ -5,7 +5,7 @@
 //! Along several flight points each station takes the angle of least `Σ w (α − α*)²` or of least weighted loss of lift-to-drag, which lies between
 //! its best angles. A governor gives rpm and power both, which angles at their best cannot meet as well: there the twist is the one with which all
 //! stations depart alike, and that common departure is the governor's. Where no angle carries the lift, and inside 0.2 R and outside 0.95 R also where
-//! Prandtl's factor leaves little load, the geometric pitch of the nearest solved station is held, so that the blade can be carved.
+//! the factor of tip and hub leaves little load, the geometric pitch of the nearest solved station is held, so that the blade can be carved.
 
 use std::ops::RangeInclusive;
 
@@ -22,7 +22,7 @@ use crate::rotor::element::{Balance, Element};
 
 /// Radius fractions between which every station with an answer is solved.
 const WORKING: RangeInclusive<f64> = 0.2..=0.95;
-/// Least Prandtl factor at which one nearer to hub or tip is solved.
+/// Least factor of tip and hub at which one nearer to hub or tip is solved.
 const LEAST_FACTOR: f64 = 0.35;
 /// Angles rest when none changes by more, rad.
 const AT_REST_RAD: f64 = 1e-6;
