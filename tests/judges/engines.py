@@ -37,9 +37,9 @@ def subjects(browser, asked, folder):
     yield "job", lambda: job.whole(browser, page, folder, asked["task"])
     yield "keyboard", lambda: keyboard.whole(browser, page, asked["keyboard"])
     yield "light and dark", lambda: look.light_and_dark(browser, page, asked["axe"])
-    yield "motion", lambda: look.motion(browser)
+    yield "motion", lambda: look.motion(browser, page)
     if browser.can_prefer:
-        yield "forced colours", lambda: look.forced(browser, asked["axe"])
+        yield "forced colours", lambda: look.forced(browser, page, asked["axe"])
     if browser.can_print:
         yield "paper", lambda: paper.whole(browser, page, folder)
     yield "phone", lambda: phone.whole(browser, page, folder, asked["task"])
@@ -66,7 +66,9 @@ def main(engine, file):
     try:
         browser.resize(*WIDE_PX)
         wanted = os.environ.get("SPOKESHAVE_ENGINES", USUAL[engine])
-        chosen = [s for s in subjects(browser, asked, folder) if wanted == "all" or s[0] in wanted.split(",")]
+        able = list(subjects(browser, asked, folder))
+        chosen = able if wanted == "all" else [s for s in able if s[0] in wanted.split(",")]
+        assert chosen, f"SPOKESHAVE_ENGINES: {wanted}; {engine} can do {', '.join(s[0] for s in able)}, or all"
         faults = [name for name, look_at in chosen if not holds(browser, name, look_at)]
     finally:
         browser.close()

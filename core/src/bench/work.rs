@@ -56,7 +56,7 @@ pub struct Bench {
     pub stations: Vec<Carved>,
     verdict: OnceLock<Result<Verdict, String>>,
     point: Option<usize>,
-    take_off: OnceLock<Option<RemovalPlan>>,
+    take_off: OnceLock<Option<Result<RemovalPlan, String>>>,
 }
 
 impl Bench {
@@ -130,16 +130,26 @@ impl Bench {
         Self { point, take_off: OnceLock::new(), ..self }
     }
 
-    /// What to take off the carved blades; `None` without readings, or where they allow no plan. Worked out once, when
-    /// it is first asked for.
+    /// What to take off the carved blades; `None` without readings, or where they allow no plan.
     #[must_use]
     pub fn take_off(&self) -> Option<&RemovalPlan> {
-        let planned = || {
-            self.job.carved.as_ref()?;
-            let rig = Rig::new(&self.job).ok()?;
-            carved::plan(&rig, self.point.unwrap_or_else(|| carved::usual_point(&rig))).ok()
+        self.planned()?.as_ref().ok()
+    }
+
+    /// Why nothing can be planned from the readings of the blades, in words; `None` where there are none, or a plan.
+    #[must_use]
+    pub fn without_plan(&self) -> Option<&str> {
+        self.planned()?.as_ref().err().map(String::as_str)
+    }
+
+    /// The plan, or why there is none; worked out once, when it is first asked for.
+    fn planned(&self) -> Option<&Result<RemovalPlan, String>> {
+        let plan = || {
+            let rig = Rig::new(&self.job).map_err(|e| e.to_string())?;
+            let point = self.point.unwrap_or_else(|| carved::usual_point(&rig));
+            carved::plan(&rig, point).map_err(|e| e.to_string())
         };
-        self.take_off.get_or_init(planned).as_ref()
+        self.take_off.get_or_init(|| self.job.carved.as_ref().map(|_| plan())).as_ref()
     }
 
     /// 1 where the leading edge is to the right of a section seen from the tip, −1 where it is to the left.

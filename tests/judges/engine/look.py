@@ -45,8 +45,9 @@ def light_and_dark(browser, page, axe):
         browser.prefer("layout.css.prefers-color-scheme.content-override", None)
 
 
-def motion(browser):
+def motion(browser, page):
     """Nothing moves for a user who wants no motion; WebKit's user does not from the start."""
+    open_page(browser, page)
     wanted = "return matchMedia('(prefers-reduced-motion: reduce)').matches"
     if browser.can_prefer:
         assert not browser.run(wanted) and browser.run(script("moving")) == 2, "what moves is not seen to move"
@@ -59,8 +60,9 @@ def motion(browser):
         browser.prefer("ui.prefersReducedMotion", None)
 
 
-def forced(browser, axe):
+def forced(browser, page, axe):
     """Colours of the user's own: lines, frames, what is chosen and the departure scale are still seen."""
+    open_page(browser, page)
     for name, value in FORCED.items():
         browser.prefer(name, value)
     until("forced colours", lambda: browser.run("return matchMedia('(forced-colors: active)').matches"))

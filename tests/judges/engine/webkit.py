@@ -3,6 +3,7 @@
 import json
 import os
 import shutil
+import socket
 import subprocess
 import time
 import urllib.error
@@ -26,22 +27,31 @@ class WebKit:
         screen = ["Xvfb", "-displayfd", "1", "-screen", "0", "1440x900x24", "-nolisten", "tcp"]
         self.screen = subprocess.Popen(screen, stdout=subprocess.PIPE, stderr=subprocess.DEVNULL)
         display = ":" + self.screen.stdout.readline().decode().strip()
-        port = 20000 + os.getpid() % 20000
+        with socket.socket() as free:
+            free.bind(("127.0.0.1", 0))
+            port = free.getsockname()[1]
         environment = {**os.environ, "DISPLAY": display, "XDG_CONFIG_HOME": settings(Path(downloads))}
         self.driver = subprocess.Popen([program, f"--port={port}"], env=environment)
         self.root = f"http://127.0.0.1:{port}/session"
         options = {"binary": str(browsers[-1]), "args": ["--automation"]}
         wanted = {"capabilities": {"alwaysMatch": {"webkitgtk:browserOptions": options}}}
+        try:
+            session = self.begin(wanted)
+        except BaseException:
+            self.end()
+            raise
+        self.root += "/" + session["sessionId"]
+        self.name = "WebKitGTK {browserVersion}".format(**session["capabilities"])
+
+    def begin(self, wanted):
         begun = time.time()
         while True:
             try:
-                session = self.ask("POST", "", wanted)
-                break
+                return self.ask("POST", "", wanted)
             except OSError:
+                assert self.driver.poll() is None, "WebKitWebDriver has ended"
                 assert time.time() - begun < PATIENCE_S, "WebKitWebDriver does not answer"
                 time.sleep(0.2)
-        self.root += "/" + session["sessionId"]
-        self.name = "WebKitGTK {browserVersion}".format(**session["capabilities"])
 
     def ask(self, method, path, body=None):
         data = None if body is None else json.dumps(body).encode()
@@ -85,7 +95,12 @@ class WebKit:
         self.ask("POST", "/window/rect", {"width": width, "height": height})
 
     def close(self):
-        self.ask("DELETE", "")
+        try:
+            self.ask("DELETE", "")
+        finally:
+            self.end()
+
+    def end(self):
         self.driver.kill()
         self.screen.kill()
 

@@ -56,7 +56,7 @@ pub enum OutlineError {
         found: usize,
     },
     /// Too few points.
-    #[error("{found} points: at least {MIN_POINTS} are needed to draw a section")]
+    #[error("{}: at least {MIN_POINTS} are needed to draw a section", counted(*found))]
     TooFew {
         /// Points found.
         found: usize,
@@ -68,7 +68,7 @@ pub enum OutlineError {
         found: usize,
     },
     /// A coordinate that is not finite, or absurdly large.
-    #[error("{place}: ({x}, {y}) is outside the allowed range -1e6 to 1e6")]
+    #[error("{place}: ({}, {}) is outside the allowed range -1e6 to 1e6", short(*x), short(*y))]
     OutOfRange {
         /// Where.
         place: Place,
@@ -128,7 +128,7 @@ pub enum OutlineError {
         place: Place,
     },
     /// A design figure of a family outside its range.
-    #[error("{what} {found}: {least} to {most} is allowed")]
+    #[error("{what} {}: {least} to {most} is allowed", short(*found))]
     Figure {
         /// Which figure.
         what: &'static str,
@@ -139,4 +139,19 @@ pub enum OutlineError {
         /// Largest value.
         most: f64,
     },
+}
+
+fn counted(points: usize) -> String {
+    if points == 0 { "no pair of coordinates x y was found".into() } else { format!("{points} points") }
+}
+
+/// A figure as it was typed, an absurd one in few signs.
+fn short(figure: f64) -> String {
+    if figure.is_nan() {
+        "not a number".into()
+    } else if figure.abs() < 1e12 {
+        figure.to_string()
+    } else {
+        format!("{figure:e}")
+    }
 }

@@ -33,7 +33,7 @@ struct Span {
 
 fn span(rig: &Rig, point: &FlightPoint) -> Span {
     let governed = matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. });
-    let high = rig.shaft.as_ref().map_or((f64::INFINITY, ""), |shaft| (highest_rpm(shaft), FASTEST));
+    let high = rig.shaft.as_ref().map_or((f64::INFINITY, ""), fastest);
     match point.setting {
         Setting::Rpm { rpm } => Span { low: (rpm, SET), high: (rpm, SET) },
         Setting::FullThrottle {} | Setting::Throttle { .. } if !governed => {
@@ -50,6 +50,16 @@ fn span(rig: &Rig, point: &FlightPoint) -> Span {
 const SET: &str = "The flight point itself sets that rpm.";
 const SLOWEST: &str = "The engine's power curve begins there: what it gives at fewer rpm is not known.";
 const FASTEST: &str = "That is the engine's limit, or the end of its power curve.";
+const UNLOADED: &str = "That is how fast the motor turns without load.";
+
+/// The highest rpm, and what sets it.
+fn fastest(shaft: &Shaft) -> (f64, &'static str) {
+    let why = match shaft {
+        Shaft::Piston(_) => FASTEST,
+        Shaft::Electric(_) => UNLOADED,
+    };
+    (highest_rpm(shaft), why)
+}
 
 /// Where a piston engine's curve begins.
 fn slowest_rpm(shaft: &Shaft) -> Option<f64> {

@@ -56,6 +56,9 @@ pub(crate) fn run(rig: &Rig, args: &Args) -> Outcome {
     let point = args.point.as_deref().map(|name| point_index(rig, Some(name))).transpose()?;
     let bench = made_ready(rig)?.planned_for(point);
     args.out.write(&sheet_files(&bench, args.paper.into(), args.out.unit()))?;
+    if let Some(why) = bench.without_plan() {
+        print(&format!("\nNo sheet of what to take off: {why}"))?;
+    }
     if let Some(warning) = bench.warning() {
         print(&format!("\n{warning}"))?;
     }
