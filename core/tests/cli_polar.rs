@@ -67,11 +67,11 @@ fn a_comparison_shows_what_departures_cost() {
 fn bad_outlines_and_options_are_exit_code_2() {
     let broken = outline().replace("0.5", "half");
     let good = outline();
-    let far = good.replacen("0.5", "1e300", 1);
+    let far = good.replacen("0.5", "1e300 0 #", 1);
     let cases = [
         (vec!["polar", "-", "--re", "2e5"], broken.as_str(), "is not a pair of numbers"),
         (vec!["polar", "-", "--re", "2e5"], "", "no pair of coordinates"),
-        (vec!["polar", "-", "--re", "2e5"], far.as_str(), "(1e300, "),
+        (vec!["polar", "-", "--re", "2e5"], far.as_str(), "(1e300, 0) is outside"),
         (vec!["polar", "-", "--re", "1e99"], good.as_str(), "Reynolds number 1e99: 10000 to"),
         (vec!["polar", "no-such.dat", "--re", "2e5"], "", "no-such.dat"),
         (vec!["polar", "-"], good.as_str(), "--re"),
