@@ -1,5 +1,6 @@
 //! Why polars could not be made.
 
+use crate::section::outline::short;
 use thiserror::Error;
 
 use crate::section::outline::OutlineError;
@@ -11,7 +12,7 @@ use crate::section::solver::SolverError;
 #[non_exhaustive]
 pub enum MakeError {
     /// Something asked for is outside its range.
-    #[error("{what} {found}: {least} to {most} is allowed")]
+    #[error("{what} {}: {least} to {most} is allowed", short(*found))]
     Request {
         /// What.
         what: &'static str,

@@ -146,7 +146,7 @@ fn counted(points: usize) -> String {
 }
 
 /// A figure as it was typed, an absurd one in few signs.
-fn short(figure: f64) -> String {
+pub(crate) fn short(figure: f64) -> String {
     if figure.is_nan() {
         "not a number".into()
     } else if figure.abs() < 1e12 {

@@ -25,6 +25,7 @@ pub(crate) use check::crossings;
 pub use check::{MAX_POINTS, MIN_POINTS};
 pub use edge::MAX_EDGE;
 pub(crate) use edge::thicken;
+pub(crate) use error::short;
 pub use error::{OutlineError, Place};
 pub use face::Face;
 pub use families::{arc_back, clark_y, naca_16_series, naca_four_digit, raf_6};

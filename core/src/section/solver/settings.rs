@@ -1,5 +1,6 @@
 //! What is asked of the solver, and how it can refuse.
 
+use crate::section::outline::short;
 use serde::{Deserialize, Serialize};
 use thiserror::Error;
 
@@ -60,7 +61,7 @@ impl Settings {
 #[non_exhaustive]
 pub enum SolverError {
     /// A setting outside its range.
-    #[error("{what} {found}: {least} to {most} is allowed")]
+    #[error("{what} {}: {least} to {most} is allowed", short(*found))]
     Setting {
         /// Name of the setting.
         what: &'static str,
