@@ -57,6 +57,7 @@ held! {
     turning_slowly_stiffens_by_southwells_coefficient
     turning_fast_gives_the_published_frequencies
     validate_moisture_wood_handbook
+    validate_least_loss_goldstein
 }
 
 /// Tests that look at more than the checks of their topic.

@@ -51,7 +51,7 @@ const MACHINE: &str = "Engine and aircraft";
 const WOOD: &str = "Wood and strength";
 
 /// All of them, in the order of the list.
-pub static TOPICS: [Topic; 34] = [
+pub static TOPICS: [Topic; 35] = [
     Topic::new("Air", "validate_air_iso_2533", air::standard),
     Topic::new(SOLVER, "joukowski_lift_is_exact", exact_flow::joukowski_lift),
     Topic::new(SOLVER, "joukowski_speeds_are_exact", exact_flow::joukowski_speeds),
@@ -77,6 +77,7 @@ pub static TOPICS: [Topic; 34] = [
     Topic::new(MACHINE, "a_piston_engine_loses_power_with_height", engine::gagg_ferrar),
     Topic::new("Fit", "full_throttle_rpm_over_speed_agrees", fit::full_throttle),
     Topic::new("Shape", "validate_least_loss_adkins_liebeck", shape::least_loss),
+    Topic::new("Shape", "validate_least_loss_goldstein", shape::least_loss_goldstein),
     Topic::new(WOOD, "validate_wood_independent_implementation", wood::arrays),
     Topic::new(WOOD, "a_job_gives_the_same_mass_and_tension", wood::as_a_job),
     Topic::new(WOOD, "validate_sections_sectionproperties", beam_section::shipped),

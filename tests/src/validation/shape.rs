@@ -6,6 +6,7 @@ use spokeshave::rig::rotation_rad_s;
 use spokeshave::shape::adkins_liebeck::{Design, Task, Wanted, design};
 
 use crate::check::{Basis, Check, Mark, worst};
+use crate::goldstein::Goldstein;
 use crate::reference::{ADKINS_LIEBECK, case, numbers};
 
 const BASIS: Basis = Basis {
@@ -74,6 +75,44 @@ pub(super) fn least_loss() -> Vec<Check> {
         checks.push(worst(&format!("{key} over the radius"), rows));
     }
     checks
+}
+
+const LIGHT: Basis = Basis {
+    source: "S. Goldstein, On the Vortex Theory of Screw Propellers, Proc. Royal Society A 123 (1929), solved anew in `tests/src/goldstein.rs`",
+    mark: Mark::Computed,
+    why: "what the program's table of his factor is held to, 0.001, and as much for a load that is light but not nothing",
+};
+
+/// The circulation of designs for next to no thrust, over that of a propeller of very many blades: Goldstein's factor.
+pub(super) fn least_loss_goldstein() -> Vec<Check> {
+    let propellers = [(2, 0.2), (2, 0.4), (3, 0.3), (4, 0.25)];
+    let each = propellers.into_iter().map(|(blades, lambda)| {
+        let exact = Goldstein::new(blades, lambda);
+        let (airspeed_m_s, radius_m) = (40.0, 0.8);
+        let task = Task {
+            airspeed_m_s,
+            rotation_rad_s: airspeed_m_s / (lambda * radius_m),
+            radius_m,
+            hub_radius_m: 0.0,
+            blades,
+            density_kg_m3: 1.2,
+            wanted: Wanted::Thrust(1.0),
+            tip_loss: TipLoss::Goldstein,
+        };
+        let found = design(task, |_| 0.0).expect("a design");
+        let at = |xi: f64| {
+            let flow = found.flow(xi, 0.0);
+            let circulation = 0.5 * flow.speed_m_s * flow.chord_lift_m;
+            let mu = xi / lambda;
+            let wake = 2.0 * std::f64::consts::PI * found.zeta * airspeed_m_s * airspeed_m_s;
+            let share =
+                f64::from(blades) * circulation * task.rotation_rad_s / wake * (1.0 + mu * mu) / (mu * mu);
+            LIGHT.within(format!("at {xi:.2} R"), share, exact.factor(xi), 0.002)
+        };
+        let rows = [0.5, 0.6, 0.7, 0.8, 0.9, 0.95].map(at).into();
+        worst(&format!("circulation over the radius, {blades} blades, λ {lambda}"), rows)
+    });
+    each.collect()
 }
 
 /// Chord, inflow and blade angle, the two factors, speed and loss at a fraction of the radius.
