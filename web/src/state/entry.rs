@@ -134,16 +134,18 @@ fn refusal(job: &Job, units: Units, field: Field, value: f64, problem: &Problem)
             };
             let allowed =
                 span_words(units, field.quantity(job), low * scale, high * scale, problem.above_lowest);
-            allowed + &hint(problem)
+            allowed + &hint(problem, units.symbol(field.quantity(job)))
         }
         _ if own => sentence(&format!("allowed is {}", problem.allowed)),
         _ => elsewhere(job, units, field, value, problem),
     }
 }
 
-/// The likely cause, where the problem names one.
-fn hint(problem: &Problem) -> String {
-    problem.allowed.split_once("; ").map_or_else(String::new, |(_, cause)| format!(" {}", sentence(cause)))
+/// The likely cause, where the problem names one: not the unit in which the box already is.
+fn hint(problem: &Problem, unit: &str) -> String {
+    let cause = problem.allowed.split_once("; ").map(|(_, cause)| cause);
+    let cause = cause.filter(|cause| !cause.ends_with(&format!(" in {unit}")));
+    cause.map_or_else(String::new, |cause| format!(" {}", sentence(cause)))
 }
 
 fn elsewhere(job: &Job, units: Units, field: Field, value: f64, problem: &Problem) -> String {

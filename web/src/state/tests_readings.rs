@@ -86,6 +86,10 @@ fn a_reading_of_the_logbook_is_added_typed_and_removed() {
         let read = typed(&one, Field::Log(0, LogFigure::Throttle), full);
         assert_eq!(read.job().logbook.as_ref().unwrap().readings[0].throttle, Some(1.0), "{full}");
     }
+    // The box is in percent already: that is no cause to tell.
+    let field = Field::Log(0, LogFigure::Throttle);
+    let refused = typed(&one, field, "150");
+    assert_eq!(refused.drafts[&field].message.as_deref(), Some("Allowed is 0 to 100\u{a0}%."));
     let level = choose(&read, LogbookChoice::Level(0, true));
     assert!(level.notice.is_some(), "level flight needs an airspeed");
     let gone = choose(&read, LogbookChoice::Remove(0));
