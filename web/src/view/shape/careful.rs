@@ -129,10 +129,11 @@ fn careful_words(state: &State, cost: &Cost) -> String {
         return String::new();
     };
     format!(
-        "A degree matters most at station {}: {} of {}.",
+        "A degree matters most at station {}: {} {} {}.",
         i + 1,
-        told(state.units, cost.figure, Some(slope)),
-        name(cost.figure)
+        name(cost.figure),
+        if slope < 0.0 { "falls by" } else { "grows by" },
+        told(state.units, cost.figure, Some(slope.abs())),
     )
 }
 
