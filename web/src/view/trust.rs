@@ -27,7 +27,10 @@ pub(super) fn trust() -> Html {
         _ => None,
     });
     let misses = rows.iter().filter_map(|row| match row[..] {
-        [what, reason] => Some(html! { <li>{ what }<small>{ format!(" – {reason}.") }</small></li> }),
+        [what, reason] => {
+            let figures = what.split("; ").map(|figure| html! { <b>{ minus(figure) }</b> });
+            Some(html! { <li>{ for figures }{ minus(&crate::view::form::capital(reason)) }{ "." }</li> })
+        }
         _ => None,
     });
     html! {
@@ -47,6 +50,19 @@ pub(super) fn trust() -> Html {
     }
 }
 
+/// A text with a true minus before every figure below zero.
+fn minus(text: &str) -> String {
+    let mut before = ' ';
+    let mut signs = text.chars().peekable();
+    let mut told = String::with_capacity(text.len());
+    while let Some(c) = signs.next() {
+        let sign = c == '-' && before == ' ' && signs.peek().is_some_and(char::is_ascii_digit);
+        told.push(if sign { '−' } else { c });
+        before = c;
+    }
+    told
+}
+
 fn pictures() -> Html {
     let picture = |(svg, caption): (&&'static str, &'static str)| {
         html! {
@@ -57,4 +73,20 @@ fn pictures() -> Html {
         }
     };
     html! { <div class="trust-pictures">{ for PICTURES.iter().zip(CAPTIONS.lines()).map(picture) }</div> }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn every_picture_has_its_caption() {
+        assert_eq!(CAPTIONS.lines().count(), PICTURES.len());
+        assert!(CAPTIONS.lines().all(|line| !line.trim().is_empty()));
+    }
+
+    #[test]
+    fn figures_below_zero_have_a_true_minus_and_words_keep_their_hyphen() {
+        assert_eq!(minus("-4.26 for -3.80 ° at 9-4"), "−4.26 for −3.80 ° at 9-4");
+    }
 }
