@@ -17,7 +17,7 @@ use crate::effect::remembered::Remembered;
 use crate::effect::{file, keys, theme};
 use crate::later::{Plan, Work};
 use crate::results::{CarvedFound, Offered, Results, Sheet};
-use crate::state::{Action, State, Variants};
+use crate::state::{Action, Notice, State, Variants};
 use crate::view::page::Page;
 use crate::{keep, view};
 
@@ -206,13 +206,29 @@ pub fn App() -> Html {
     use_drops(&act);
     use_keys(&act, !store.0.drafts.is_empty());
     use_effect_with(Remembered::of(&store.0), |remembered| remembered.write());
-    use_effect_with(store.0.variants.clone(), |variants| keep::keep_beside(&variants.to_text()));
+    {
+        let act = act.clone();
+        use_effect_with(store.0.variants.clone(), move |variants| {
+            if !keep::keep_beside(&variants.to_text()) {
+                act.emit(Action::Say(beside_not_kept()));
+            }
+        });
+    }
     use_effect_with(store.0.theme, |picked| theme::show(*picked));
     use_effect_with(store.0.job().title.clone(), |title| theme::title(title));
     html! {
         <ContextProvider<view::Act> context={view::Act(act)}>
             <Page state={view::Seen::new(Rc::new(store.0.clone()))} {now} {later} />
         </ContextProvider<view::Act>>
+    }
+}
+
+fn beside_not_kept() -> Notice {
+    let last =
+        "They last as long as this page is open. Use one as the drawn blade and save the job to keep it.";
+    Notice {
+        title: "This browser’s storage does not take the blades beside the drawn one.".into(),
+        lines: vec![last.into()],
     }
 }
 

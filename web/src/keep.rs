@@ -14,7 +14,7 @@ extern "C" {
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = beside)]
     fn kept_beside() -> Option<String>;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = putBeside)]
-    fn put_beside(json: &str);
+    fn put_beside(json: &str) -> bool;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = before)]
     fn keep_before(json: &str) -> bool;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = after)]
@@ -44,9 +44,12 @@ pub fn beside() -> Option<String> {
     kept_beside()
 }
 
-/// Keeps the blades beside the drawn one, as far as the browser's storage takes them; an empty text takes them out.
-pub fn keep_beside(json: &str) {
-    put_beside(json);
+/// Keeps the blades beside the drawn one; an empty text takes them out.
+///
+/// Returns whether the browser's storage took them; where not, say so.
+#[must_use]
+pub fn keep_beside(json: &str) -> bool {
+    put_beside(json)
 }
 
 /// Keeps the job; call before working it out, so that a crash finds it kept. Marks the work as begun:
