@@ -72,7 +72,10 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
         props.state.job().flight_points.iter().map(|p| AttrValue::from(p.name.clone())).collect::<Vec<_>>();
     let quantity = quantity(now.speed);
     let asked_of_wood = matches!(&now.answer, Some(Ok(changes)) if changes.iter().any(|c| c.plan.is_some()));
-    let before = props.rig.as_ref().filter(|_| asked_of_wood).and_then(|rig| analyse(&rig.0).ok());
+    // Worked out once for each job: the panel of the carved blades, which has it too, may never have been open.
+    let before = use_memo((props.rig.clone(), asked_of_wood), |(rig, asked)| {
+        rig.as_ref().filter(|_| *asked).and_then(|rig| analyse(&rig.0).ok())
+    });
     html! {
         <div class="change">
             <h3>{ "What to change" }</h3>
@@ -87,7 +90,7 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
                 if props.logged.as_deref().is_some_and(Result::is_ok) {
                     <p class="note">{ "Worked out with the factors that the readings tell, kept or not." }</p>
                 }
-                { for changes.iter().map(|c| told(c, before.as_ref(), now.speed, props.state.units)) }
+                { for changes.iter().map(|c| told(c, (*before).as_ref(), now.speed, props.state.units)) }
             }
         </div>
     }
