@@ -1,7 +1,9 @@
 //! What is typed to make a polar, and what it means. Nothing here touches the browser.
 
-use spokeshave::section::make::{Angles, Plan, ROUGH_NOSE, Request, proposed_reynolds, proposed_thickness};
-use spokeshave::section::outline::Outline;
+use spokeshave::section::make::{
+    Angles, MakeError, Plan, ROUGH_NOSE, Request, proposed_reynolds, proposed_thickness,
+};
+use spokeshave::section::outline::{Outline, OutlineError};
 
 use crate::background::polars::Order;
 
@@ -124,8 +126,11 @@ impl Form {
         if name.is_empty() {
             return Err((Some(Place::Name), "A name for the stations to call the section by.".into()));
         }
+        if let Some(why) = super::taken(&name) {
+            return Err((Some(Place::Name), why));
+        }
         let request = self.request()?;
-        Plan::new(&outline, &request).map_err(|e| (blamed(&e.to_string()), said(&e.to_string())))?;
+        Plan::new(&outline, &request).map_err(|e| (blamed(&e.to_string()), said(&e)))?;
         Ok(Order { name, outline: self.outline.clone(), request })
     }
 
@@ -161,14 +166,17 @@ impl Form {
     }
 
     fn list(&self, place: Place) -> Result<Vec<f64>, (Option<Place>, String)> {
-        let words = self
-            .text(place)
-            .split([' ', ';', '\t'])
-            .map(|w| w.trim_end_matches(','))
-            .filter(|w| !w.is_empty());
-        words
-            .map(|word| number(word).ok_or_else(|| (Some(place), format!("“{word}” is no number. Allowed are numbers with blanks between, such as 100000 200000."))))
-            .collect()
+        // Reynolds numbers have no decimals: a comma stands between two of them.
+        let reynolds = place == Place::Reynolds;
+        let apart = |c: char| c.is_whitespace() || c == ';' || (c == ',' && reynolds);
+        let words = self.text(place).split(apart).map(|w| w.trim_end_matches(',')).filter(|w| !w.is_empty());
+        let allowed = if reynolds {
+            "numbers with blanks or commas between, such as 100000, 200000"
+        } else {
+            "percentages with blanks between, such as 8 12 16"
+        };
+        let refused = |word| (Some(place), format!("“{word}” is no number. Allowed are {allowed}."));
+        words.map(|word| number(word).ok_or_else(|| refused(word))).collect()
     }
 }
 
@@ -193,10 +201,42 @@ fn blamed(error: &str) -> Option<Place> {
 }
 
 /// The core speaks of shares of the chord, the boxes of per cent.
-fn said(error: &str) -> String {
-    let share = ["thickness", "trailing", "trip"].iter().any(|start| error.starts_with(start));
-    let note = if share { ", as shares of the chord: 0.01 is 1 %" } else { "" };
-    format!("{}{note}.", super::super::form::capital(error))
+fn said(error: &MakeError) -> String {
+    // An absurd share stays as it is; any other has three decimals of a per cent.
+    let percent = |share: f64| if share.abs() < 1e7 { (1e5 * share).round() / 1e3 } else { 100.0 * share };
+    let text = match error {
+        MakeError::Order { what: what @ "thickness ratios", before, after } => {
+            let [before, after] = [before, after].map(|t| percent(*t));
+            MakeError::Order { what, before, after }.to_string()
+        }
+        other => match share(other) {
+            Some((what, bounds)) => {
+                let short = |p: f64| if p.abs() < 1e9 { p.to_string() } else { format!("{p:e}") };
+                let [found, least, most] = bounds.map(percent).map(short);
+                format!("{what} {found} %: {least} to {most} % is allowed")
+            }
+            None => other.to_string(),
+        },
+    };
+    format!("{}.", super::super::form::capital(&text))
+}
+
+/// A share of the chord that is out of its range: what, its value, the least and the most.
+fn share(error: &MakeError) -> Option<(&'static str, [f64; 3])> {
+    match *error {
+        MakeError::Request { what, found, least, most }
+            if ["thickness", "trip"].iter().any(|start| what.starts_with(start)) =>
+        {
+            Some((what, [found, least, most]))
+        }
+        MakeError::Outline(OutlineError::Figure { what, found, least, most }) => {
+            Some((what, [found, least, most]))
+        }
+        MakeError::Outline(OutlineError::Thickness { found, least, most }) => {
+            Some(("thickness ratio", [found, least, most]))
+        }
+        _ => None,
+    }
 }
 
 /// A number, a comma read as a point.
@@ -236,16 +276,34 @@ mod tests {
     }
 
     #[test]
+    fn reynolds_numbers_stand_between_blanks_commas_or_semicolons() {
+        for text in ["200000,500000", "200000, 500000", "200000;500000", " 200000\t500000 "] {
+            let order = filled().with(Place::Reynolds, text.into()).order().unwrap();
+            assert_eq!(order.request.reynolds, [2e5, 5e5], "{text}");
+        }
+        let order = filled().with(Place::Thickness, "8,5 12".into()).order().unwrap();
+        assert_eq!(order.request.thickness_ratios, [0.085, 0.12]);
+    }
+
+    #[test]
     fn what_is_wrong_is_said_at_its_box() {
         let cases = [
             (Place::Name, " ", "name"),
-            (Place::Reynolds, "fast", "no number"),
+            (Place::Name, "clark-y", "“clark-y” is one of the program’s own sections"),
+            (
+                Place::Reynolds,
+                "fast",
+                "“fast” is no number. Allowed are numbers with blanks or commas between",
+            ),
             (Place::Reynolds, "", "Count of Reynolds numbers 0"),
             (Place::Reynolds, "9", "Reynolds number 9"),
             (Place::Reynolds, "200000 100000", "follows"),
-            (Place::Thickness, "900", "0.01 is 1 %"),
+            (Place::Thickness, "900", "Thickness ratio 900 %: 1 to 60 % is allowed."),
+            (Place::Thickness, "9e99", "Thickness ratio 9e99 %: 1"),
+            (Place::Thickness, "thick", "Allowed are percentages with blanks between"),
+            (Place::Thickness, "12 8", "8 follows 12"),
             (Place::Edge, "0.1", "Trailing edge thickness"),
-            (Place::Edge, "40", "0.01 is 1 %"),
+            (Place::Edge, "40", "40 %: 0 to 5 % is allowed."),
             (Place::Amplification, "", "number is needed"),
             (Place::Step, "0", "Step of angle"),
             (Place::Last, "99", "Last angle"),

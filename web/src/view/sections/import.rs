@@ -6,7 +6,15 @@ use yew::prelude::*;
 
 use super::boxes::{Line, Opener, Sheet};
 use crate::state::{Action, Choice, Running};
-use crate::view::use_act;
+use crate::view::{Seen, use_act};
+
+/// Properties of [`Import`].
+#[derive(Properties, PartialEq)]
+pub(super) struct ImportProps {
+    pub(super) state: Seen,
+    /// Told the name of a section that joins the job.
+    pub(super) onjoin: Callback<String>,
+}
 
 /// Texts as typed, and what came of them.
 #[derive(Clone, Debug, Default, PartialEq)]
@@ -23,7 +31,7 @@ const HINT: &str = "alpha_deg,cl,cd,reynolds\n-2,0.15,0.0102,200000\n0,0.37,0.00
 
 /// The boxes and the button.
 #[component]
-pub(super) fn Import() -> Html {
+pub(super) fn Import(props: &ImportProps) -> Html {
     let act = use_act();
     let draft = use_state_eq(|| Draft { name: "measured".into(), ..Draft::default() });
     let set = |change: fn(&mut Draft, String)| {
@@ -46,9 +54,12 @@ pub(super) fn Import() -> Html {
     };
     let add = {
         let draft = draft.clone();
+        let (job, onjoin) = (props.state.job().clone(), props.onjoin.clone());
         Callback::from(move |_: MouseEvent| {
             let next = match section(&draft) {
                 Ok((section, said)) => {
+                    let said = said + &super::joined(&job, &section.name);
+                    onjoin.emit(section.name.clone());
                     act.send(Action::Choose(Choice::JoinSection(Box::new(section)), Running::default()));
                     Draft { message: None, said: Some(said.into()), ..(*draft).clone() }
                 }
@@ -95,6 +106,9 @@ fn section(draft: &Draft) -> Result<(Section, String), String> {
     if let Some(problem) = section.problems().first() {
         return Err(problem.to_string());
     }
+    if let Some(why) = super::taken(&section.name) {
+        return Err(why);
+    }
     let unused = if read.unused.is_empty() {
         String::new()
     } else {
@@ -108,6 +122,7 @@ fn section(draft: &Draft) -> Result<(Section, String), String> {
 #[cfg(test)]
 mod tests {
     use super::*;
+    use spokeshave::job::{DEMOS, Job};
 
     #[test]
     fn a_table_becomes_a_section_or_is_refused_with_its_place() {
@@ -121,9 +136,14 @@ mod tests {
         let (own, said) = section(&draft).unwrap();
         assert_eq!((own.name.as_str(), own.face_angle_deg), ("tunnel", Some(2.5)));
         assert!(said.contains("6 rows, 1 polar joined"), "{said}");
+        let job = Job::from_json(DEMOS[0].json).unwrap();
+        assert!(!super::super::joined(&job, "tunnel").contains("replaced"));
+        assert!(super::super::joined(&job.with_section(own), "tunnel").contains("“tunnel” replaced"));
         let bad = Draft { table: draft.table.replace("cd", "drag"), ..draft.clone() };
         assert!(section(&bad).unwrap_err().contains("no column cd"));
         assert!(section(&Draft { face: "flat".into(), ..draft.clone() }).unwrap_err().contains("no number"));
+        let shipped = Draft { name: "raf-6".into(), ..draft.clone() };
+        assert!(section(&shipped).unwrap_err().contains("program’s own"));
         assert!(section(&Draft { name: " ".into(), ..draft }).unwrap_err().contains("name"));
     }
 }

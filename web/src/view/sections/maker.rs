@@ -28,6 +28,8 @@ pub(super) struct MakerProps {
     pub(super) reynolds: Vec<f64>,
     /// Thickness ratios of the stations.
     pub(super) thickness: Vec<f64>,
+    /// Told the name of a section that joins the job.
+    pub(super) onjoin: Callback<String>,
 }
 
 /// What the run is doing or has come to.
@@ -62,7 +64,7 @@ pub(super) fn Maker(props: &MakerProps) -> Html {
             form.set(next);
         })
     };
-    let start = use_start(&shown, &wrong, &run, &hand);
+    let start = use_start(&shown, props, &wrong, &run, &hand);
     let cancel = {
         let (run, hand) = (run.clone(), hand.clone());
         Callback::from(move |()| {
@@ -95,11 +97,16 @@ pub(super) fn Maker(props: &MakerProps) -> Html {
 #[hook]
 fn use_start(
     form: &Form,
+    props: &MakerProps,
     wrong: &UseStateHandle<Option<(Option<Place>, String)>>,
     run: &UseStateHandle<Run>,
     hand: &std::rc::Rc<std::cell::RefCell<Option<Hand>>>,
 ) -> Callback<MouseEvent> {
     let act = use_act();
+    // The job as it is when the run ends.
+    let job = use_mut_ref(|| props.state.job().clone());
+    job.replace(props.state.job().clone());
+    let onjoin = props.onjoin.clone();
     let (form, wrong, run, hand) = (form.clone(), wrong.clone(), run.setter(), hand.clone());
     Callback::from(move |_: MouseEvent| {
         let order = match form.order() {
@@ -109,7 +116,7 @@ fn use_start(
         wrong.set(None);
         run.set(Run::At(None));
         let begun = Date::now();
-        let (act, told) = (act.clone(), run.clone());
+        let (act, told, job, onjoin) = (act.clone(), run.clone(), job.clone(), onjoin.clone());
         let heard = move |heard: Heard<Report>| {
             told.set(match heard {
                 Heard::Report(Report::Step(step)) => Run::At(Some(step)),
@@ -119,8 +126,10 @@ fn use_start(
                 )),
                 Heard::Report(Report::Done(section, comparison)) => {
                     let seconds = fixed((Date::now() - begun) / 1000.0, 1);
-                    let said =
-                        format!("“{}” joined the job after {seconds} s. {}", section.name, section.origin);
+                    let name = section.name.clone();
+                    let how = super::joined(&job.borrow(), &name);
+                    let said = format!("“{name}” joined the job after {seconds} s.{how} {}", section.origin);
+                    onjoin.emit(name);
                     act.send(Action::Choose(Choice::JoinSection(section), Running::default()));
                     Run::Done(said, comparison)
                 }

@@ -12,7 +12,9 @@ mod used;
 
 use std::rc::Rc;
 
+use spokeshave::job::Job;
 use spokeshave::result::PointResult;
+use spokeshave::section::library;
 use yew::prelude::*;
 
 use super::Seen;
@@ -39,13 +41,36 @@ pub fn Sections(props: &SectionsProps) -> Html {
     let reynolds: Vec<f64> = over_stations(props).map(|s| s.reynolds).collect();
     let thickness: Vec<f64> =
         props.state.job().propeller.stations.iter().map(|s| s.thickness_ratio).collect();
+    // The section whose tables are shown: the one picked, or the one that joined last.
+    let picked = use_state_eq(|| None::<String>);
+    let onpick = {
+        let picked = picked.setter();
+        Callback::from(move |name| picked.set(Some(name)))
+    };
     html! {
         <div class="sections">
-            <Used state={props.state.clone()} rig={props.rig.clone()} />
-            <Maker state={props.state.clone()} {reynolds} {thickness} />
-            <Import />
+            <Used state={props.state.clone()} rig={props.rig.clone()} picked={(*picked).clone()} onpick={onpick.clone()} />
+            <Maker state={props.state.clone()} {reynolds} {thickness} onjoin={onpick.clone()} />
+            <Import state={props.state.clone()} onjoin={onpick} />
         </div>
     }
+}
+
+/// Why a section of one's own cannot have a name: a family that comes with the program has it.
+fn taken(name: &str) -> Option<String> {
+    let mut names = library().names();
+    let why = || format!("“{name}” is one of the program’s own sections: give yours another name.");
+    names.any(|shipped| shipped == name).then(why)
+}
+
+/// What a section that joins the job replaces, and where a station can take it.
+fn joined(job: &Job, name: &str) -> String {
+    let replaced = if job.sections.iter().any(|own| own.name == name) {
+        format!(" “{name}” replaced the one of that name; Undo brings it back.")
+    } else {
+        String::new()
+    };
+    format!("{replaced} Pick it under Blade → Section.")
 }
 
 fn over_stations(props: &SectionsProps) -> impl Iterator<Item = &spokeshave::result::StationResult> {

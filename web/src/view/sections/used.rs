@@ -18,6 +18,9 @@ use crate::view::{Seen, use_act};
 pub(super) struct UsedProps {
     pub(super) state: Seen,
     pub(super) rig: Option<RigRef>,
+    /// Name of the section to show.
+    pub(super) picked: Option<String>,
+    pub(super) onpick: Callback<String>,
 }
 
 /// A family with how the job has it.
@@ -31,14 +34,17 @@ struct Shown {
 /// A list to pick from and the tables of the one picked.
 #[component]
 pub(super) fn Used(props: &UsedProps) -> Html {
-    let picked = use_state_eq(|| None::<String>);
     let shown = families(&props.state, props.rig.as_ref());
     let name_of = |s: &Shown| s.family.about.name.clone();
-    let chosen = picked.as_ref().and_then(|name| shown.iter().position(|s| name_of(s) == *name)).unwrap_or(0);
+    let chosen =
+        props.picked.as_ref().and_then(|name| shown.iter().position(|s| name_of(s) == *name)).unwrap_or(0);
     let Some(current) = shown.get(chosen).cloned() else { return html! {} };
     let options: Vec<AttrValue> = shown.iter().map(|s| words(s).into()).collect();
     let names: Vec<String> = shown.iter().map(name_of).collect();
-    let onpick = Callback::from(move |i: usize| picked.set(names.get(i).cloned()));
+    let onpick = {
+        let picked = props.onpick.clone();
+        Callback::from(move |i: usize| names.get(i).cloned().into_iter().for_each(|name| picked.emit(name)))
+    };
     html! {
         <div class="used-sections">
             <h3>{ "Tables of the sections" }</h3>
