@@ -5,7 +5,6 @@ use spokeshave::section::import::{MOST_BYTES, read};
 use yew::prelude::*;
 
 use super::boxes::{Line, Opener, Sheet};
-use crate::state::{Action, Choice, Running};
 use crate::view::{Seen, use_act};
 
 /// Properties of [`Import`].
@@ -56,11 +55,13 @@ pub(super) fn Import(props: &ImportProps) -> Html {
         let draft = draft.clone();
         let (job, onjoin) = (props.state.job().clone(), props.onjoin.clone());
         Callback::from(move |_: MouseEvent| {
-            let next = match section(&draft) {
-                Ok((section, said)) => {
-                    let said = said + &super::joined(&job, &section.name);
-                    onjoin.emit(section.name.clone());
-                    act.send(Action::Choose(Choice::JoinSection(Box::new(section)), Running::default()));
+            let joined = section(&draft).and_then(|(section, said)| {
+                let name = section.name.clone();
+                Ok((name, said + &super::join(&act, &job, section)?))
+            });
+            let next = match joined {
+                Ok((name, said)) => {
+                    onjoin.emit(name);
                     Draft { message: None, said: Some(said.into()), ..(*draft).clone() }
                 }
                 Err(why) => Draft { message: Some(why.into()), said: None, ..(*draft).clone() },

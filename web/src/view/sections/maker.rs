@@ -15,7 +15,6 @@ use super::progress::Progress;
 use crate::background::hand::{Hand, Heard};
 use crate::background::polars::{Report, Step};
 use crate::number::fixed;
-use crate::state::{Action, Choice, Running};
 use crate::view::blade::section_names;
 use crate::view::form::{Pick, Switch};
 use crate::view::{Seen, use_act};
@@ -126,12 +125,17 @@ fn use_start(
                 )),
                 Heard::Report(Report::Done(section, comparison)) => {
                     let seconds = fixed((Date::now() - begun) / 1000.0, 1);
-                    let name = section.name.clone();
-                    let how = super::joined(&job.borrow(), &name);
-                    let said = format!("“{name}” joined the job after {seconds} s.{how} {}", section.origin);
-                    onjoin.emit(name);
-                    act.send(Action::Choose(Choice::JoinSection(section), Running::default()));
-                    Run::Done(said, comparison)
+                    let (name, origin) = (section.name.clone(), section.origin.clone());
+                    // Let go of before the job changes.
+                    let job = job.borrow().clone();
+                    match super::join(&act, &job, *section) {
+                        Ok(how) => {
+                            let said = format!("“{name}” joined the job after {seconds} s.{how} {origin}");
+                            onjoin.emit(name);
+                            Run::Done(said, comparison)
+                        }
+                        Err(why) => Run::Stopped(format!("“{name}” did not join the job. {why}")),
+                    }
                 }
             });
         };

@@ -12,14 +12,14 @@ mod used;
 
 use std::rc::Rc;
 
-use spokeshave::job::Job;
+use spokeshave::job::{Job, Section};
 use spokeshave::result::PointResult;
 use spokeshave::section::library;
 use yew::prelude::*;
 
-use super::Seen;
+use super::{Act, Seen};
 use crate::app::RigRef;
-use crate::state::State;
+use crate::state::{Action, Choice, Running, State};
 use import::Import;
 use maker::Maker;
 use used::Used;
@@ -63,7 +63,17 @@ fn taken(name: &str) -> Option<String> {
     names.any(|shipped| shipped == name).then(why)
 }
 
-/// What a section that joins the job replaces, and where a station can take it.
+/// Joins a section to the job. Says what it replaces and where a station can take it.
+///
+/// # Errors
+/// Why the job cannot take it.
+fn join(act: &Act, job: &Job, section: Section) -> Result<String, String> {
+    let (name, choice) = (section.name.clone(), Choice::JoinSection(Box::new(section)));
+    choice.made(job, Running::default())?;
+    act.send(Action::Choose(choice, Running::default()));
+    Ok(joined(job, &name))
+}
+
 fn joined(job: &Job, name: &str) -> String {
     let replaced = if job.sections.iter().any(|own| own.name == name) {
         format!(" “{name}” replaced the one of that name; Undo brings it back.")
