@@ -1,7 +1,9 @@
 //! The fit over the speed range: its figures hold together, its curves do not jump, and limits are told.
 
+use spokeshave::air::Air;
+use spokeshave::aircraft::drag_n;
 use spokeshave::fit::{ceilings, crossings, envelope, matched, take_off};
-use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, Setting};
+use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PowerPoint, Setting};
 use spokeshave::result::{Envelope, Note, State};
 use spokeshave::rig::{Rig, air_of};
 use spokeshave::rotor::Condition;
@@ -327,4 +329,29 @@ fn the_roll_is_that_of_thrust_less_drag_and_friction_step_by_step_in_time() {
     }
     assert!((t.ground_roll_m / way - 1.0).abs() < 2e-3, "{t:?} {way}");
     assert!((t.ground_roll_s / time - 1.0).abs() < 2e-3, "{t:?} {time}");
+    // From there energy: 15 m and the gain of speed, over what thrust and drag leave of the weight at both ends.
+    let Some(Aircraft::Aeroplane(a)) = &job.aircraft else { panic!("an aeroplane") };
+    let air = Air::standard(0.0, 0.0).unwrap();
+    let slope = |v: f64| (thrust(v) - drag_n(a, &air, v).unwrap()) / (430.0 * 9.806_65);
+    let height = 15.0 + (t.screen_m_s.powi(2) - t.lift_off_m_s.powi(2)) / (2.0 * 9.806_65);
+    let airborne = height / (0.5 * (slope(t.lift_off_m_s) + slope(t.screen_m_s)));
+    assert!(((t.distance_to_15_m - t.ground_roll_m) / airborne - 1.0).abs() < 2e-3, "{t:?} {airborne}");
+}
+
+/// A blade whose tip passes the Mach numbers of note within the range.
+#[test]
+fn where_the_tip_passes_a_mach_number_it_has_it() {
+    let mut job = fine();
+    if let Some(Engine::Piston(engine)) = &mut job.engine {
+        engine.max_rpm = None;
+        engine.full_throttle.push(PowerPoint { rpm: 4200.0, power_w: 60_000.0 });
+    }
+    let passed = range(&job, 60).marks.tip_mach_from;
+    assert!(!passed.is_empty());
+    for mark in passed {
+        job.flight_points = vec![full(Some(mark.airspeed_m_s))];
+        let found = Rig::new(&job).unwrap().point(0).unwrap().figures.tip_mach.unwrap();
+        // A straight line between two of sixty speeds.
+        assert!((found / mark.tip_mach - 1.0).abs() < 1e-3, "{mark:?} {found}");
+    }
 }
