@@ -25,6 +25,7 @@ mod cli_strength;
 mod constant_speed;
 mod dive_and_worth;
 mod dossier;
+mod elements;
 mod envelope;
 mod fit;
 mod job_options;
