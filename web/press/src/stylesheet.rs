@@ -4,7 +4,7 @@ use crate::Workspace;
 use anyhow::{Context, Result};
 use std::path::PathBuf;
 
-/// All style sheets as one, those of the start messages first.
+/// All style sheets as one, those of the start messages first, without remarks and needless blanks.
 pub(crate) fn joined(workspace: &Workspace) -> Result<String> {
     let folder = workspace.root.join("web/style");
     let listed = std::fs::read_dir(&folder).with_context(|| format!("cannot list {}", folder.display()))?;
@@ -16,5 +16,6 @@ pub(crate) fn joined(workspace: &Workspace) -> Result<String> {
         let text = std::fs::read_to_string(&sheet);
         joined.push_str(&text.with_context(|| format!("cannot read {}", sheet.display()))?);
     }
-    Ok(joined)
+    let small = minifier::css::minify(&joined);
+    Ok(small.map_err(|what| anyhow::anyhow!("a style sheet cannot be read: {what}"))?.to_string())
 }
