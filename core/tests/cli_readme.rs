@@ -2,7 +2,7 @@
 #![cfg(feature = "cli")]
 
 use std::fs;
-use std::path::Path;
+use std::path::{Path, PathBuf};
 use std::process::{Command, Output};
 
 const README: &str = include_str!("../../README.md");
@@ -30,9 +30,20 @@ fn run(folder: &Path, arguments: &str) -> Output {
         .unwrap()
 }
 
+/// A folder that goes with the test, whatever becomes of it.
+struct Made(PathBuf);
+
+impl Drop for Made {
+    fn drop(&mut self) {
+        // What cannot be removed is left to the system's own cleaning.
+        let _ = fs::remove_dir_all(&self.0);
+    }
+}
+
 #[test]
 fn every_command_of_the_readme_has_an_answer() {
-    let folder = std::env::temp_dir().join(format!("spokeshave-readme-{}", std::process::id()));
+    let made = Made(std::env::temp_dir().join(format!("spokeshave-readme-{}", std::process::id())));
+    let folder = &made.0;
     fs::create_dir_all(folder.join("airfoils/clark-y")).unwrap();
     for (name, text) in GIVEN {
         fs::write(folder.join(name), text).unwrap();
@@ -41,7 +52,7 @@ fn every_command_of_the_readme_has_an_answer() {
     assert!(commands.len() > 20, "{commands:?}");
     for line in commands {
         let (arguments, into) = line.split_once(" > ").unwrap_or((line, ""));
-        let output = run(&folder, arguments);
+        let output = run(folder, arguments);
         let (said, complaint) =
             (String::from_utf8(output.stdout).unwrap(), String::from_utf8_lossy(&output.stderr).into_owned());
         assert_eq!(output.status.code(), Some(0), "{line}: {complaint}");
@@ -50,8 +61,7 @@ fn every_command_of_the_readme_has_an_answer() {
             fs::write(folder.join(into), said).unwrap();
         }
     }
-    for made in ["paper", "solid", "report.pdf"] {
-        assert!(folder.join(made).exists(), "{made}");
+    for written in ["paper", "solid", "report.pdf"] {
+        assert!(folder.join(written).exists(), "{written}");
     }
-    fs::remove_dir_all(folder).unwrap();
 }

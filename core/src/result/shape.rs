@@ -118,10 +118,13 @@ impl Twist {
         match (self.settled, self.governor_departure_deg) {
             (false, _) => "Blade and settings did not come to rest.".into(),
             (true, None) => "Blade and settings agree.".into(),
-            (true, Some(all)) => format!(
-                "The governor sets the pitch: at the rpm it holds all solved stations depart alike, by {all:+.2}° from their best \
-                 angle. No twist changes that; another rpm, diameter or chord does."
-            ),
+            (true, Some(all)) => {
+                let all = format!("{all:+.2}").replace('-', "−");
+                format!(
+                    "The governor sets the pitch: at the rpm it holds all solved stations depart alike, by {all}° from their best \
+                     angle. No twist changes that; another rpm, diameter or chord does."
+                )
+            }
         }
     }
 }

@@ -273,7 +273,11 @@ impl FrequencyLine {
             3 => "rd",
             _ => "th",
         };
-        let mode = if self.mode == ModeKind::Torsion { "twist" } else { "bending" };
+        let mode = match self.mode {
+            ModeKind::Flap => "flap",
+            ModeKind::Lag => "lag",
+            ModeKind::Torsion => "twist",
+        };
         format!("{}{nth} {mode}", self.number)
     }
 }

@@ -58,7 +58,7 @@ pub fn files() -> Vec<File> {
         File { name: "validation.md", text: text() },
         File { name: "validation/summary.tsv", text: for_the_page() },
     ];
-    let captions = plots::CAPTIONS.iter().map(|(_, says)| format!("{says}\n")).collect();
+    let captions = plots::CAPTIONS.map(|(_, says)| says).join("\n") + "\n";
     files.push(File { name: "validation/captions.txt", text: captions });
     files.extend(plots::all().map(|(name, text)| File { name, text }));
     files

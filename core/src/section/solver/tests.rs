@@ -66,7 +66,10 @@ fn bad_settings_are_named() {
             .to_string()
     };
     assert_eq!(refuse(Settings::free(10.0, 9.0), &[0.0]), "reynolds 10: 10000 to 100000000 is allowed");
-    assert_eq!(refuse(Settings::free(f64::NAN, 9.0), &[0.0]), "reynolds NaN: 10000 to 100000000 is allowed");
+    assert_eq!(
+        refuse(Settings::free(f64::NAN, 9.0), &[0.0]),
+        "reynolds not a number: 10000 to 100000000 is allowed"
+    );
     assert!(refuse(Settings::free(1e6, 9.0), &[1.0, 0.0]).starts_with("2 angles from 1 to 0 degrees"));
     let stopped = sweep(&section, &Settings::free(1e6, 9.0), &[0.0, 1.0], |_, _, _| ControlFlow::Break(()));
     assert!(matches!(stopped, Err(SolverError::Stopped { done: 1, total: 2 })));

@@ -60,7 +60,7 @@ fn text(t: &Twist) -> String {
     format!(
         "Best-incidence twist for {}\n{}\n\n{}\n\n{}",
         names.join(", "),
-        t.sentence().replace('-', "−"),
+        t.sentence(),
         table(&header, rows),
         compared(&t.flight_points)
     )
