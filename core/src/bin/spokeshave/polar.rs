@@ -33,7 +33,7 @@ pub(crate) struct Args {
     #[arg(long, value_name = "T,...", value_delimiter = ',')]
     thickness: Vec<f64>,
     /// Amplification exponent at transition: 9 quiet air, 4 disturbed air
-    #[arg(long, value_name = "N", default_value_t = 9.0)]
+    #[arg(long = "amplification", value_name = "N", default_value_t = 9.0)]
     n_crit: f64,
     /// Angles of attack to the chord line, degrees: FIRST..LAST:STEP
     #[arg(long, value_name = "A..B:STEP", default_value = "-6..14:0.5", allow_hyphen_values = true)]

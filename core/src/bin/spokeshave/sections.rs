@@ -13,7 +13,7 @@ pub(crate) struct Args {
     #[arg(long, value_name = "PERCENT", default_value_t = 12.0, requires = "name")]
     thickness: f64,
     /// Which tables: 9 for quiet air, 4 for disturbed air; the nearest there are
-    #[arg(long, value_name = "N", default_value_t = 9.0, requires = "name")]
+    #[arg(long = "amplification", value_name = "N", default_value_t = 9.0, requires = "name")]
     n_crit: f64,
     /// Lift and drag over the angle of attack as CSV
     #[arg(long, requires = "name")]
