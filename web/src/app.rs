@@ -39,6 +39,12 @@ fn started() -> Store {
     if kept.is_some() && state.notice.is_some() {
         keep::set_aside();
     }
+    if keep::torn() && state.notice.is_none() {
+        state.notice = Some(Notice {
+            title: "What this browser kept last of the job was cut off.".into(),
+            lines: vec!["This is what was kept before it, or an example where there was nothing. Files are as you saved them.".into()],
+        });
+    }
     Store(Remembered::read().applied(state))
 }
 

@@ -9,6 +9,8 @@ use wasm_bindgen::prelude::wasm_bindgen;
 extern "C" {
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = atStart)]
     fn job_at_start() -> Option<String>;
+    #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = torn)]
+    fn kept_in_part() -> bool;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = inFile)]
     fn job_in_file() -> Option<String>;
     #[wasm_bindgen(js_namespace = ["spokeshave", "keep"], js_name = beside)]
@@ -30,6 +32,12 @@ extern "C" {
 #[must_use]
 pub fn at_start() -> Option<String> {
     job_at_start()
+}
+
+/// Whether the last that was kept in this browser is not whole, so that [`at_start`] gives what was kept before it, if anything.
+#[must_use]
+pub fn torn() -> bool {
+    kept_in_part()
 }
 
 /// The job this very file was saved with, as JSON.

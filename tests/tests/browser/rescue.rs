@@ -105,6 +105,10 @@ async fn a_write_that_was_cut_off_leaves_the_one_before() -> Result<()> {
             return keys.length;";
         assert_eq!(browser.run(halved).await?, 2);
         assert_eq!(browser.run("return spokeshave.keep.atStart()").await?, older);
+        browser.reload().await?;
+        browser.wait_for_text("What this browser kept last of the job was cut off.").await?;
+        browser.reload().await?;
+        assert_eq!(browser.run("return spokeshave.keep.torn()").await?, false);
         Ok(())
     })
     .await

@@ -61,6 +61,10 @@
       if (!kept) { return embedded || null; }
       return kept.job || null;
     },
+    // Whether something was kept here that is not whole: the browser ended in the middle of a write.
+    torn: function () {
+      return PLACES.some(function (key) { return read(key) !== null && !whole(key); });
+    },
     // The job this very file was saved with, else null.
     inFile: function () { return embedded || null; },
     // Call before working a job out. The job goes into storage and into this document, so that the
