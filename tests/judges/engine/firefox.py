@@ -1,8 +1,8 @@
 """Firefox, driven by Mozilla's own client."""
 
 import base64
-import os
 import shutil
+from pathlib import Path
 
 ELEMENT = "css selector"
 
@@ -24,7 +24,9 @@ class Firefox:
             "browser.download.always_ask_before_handling_new_types": False,
             "browser.download.alwaysOpenPanel": False,
         }
-        self.client = Marionette(bin=program, headless=True, prefs=wanted, gecko_log=os.devnull)
+        # Never the null device: the driver removes what stands where its log is to be, and as root it can.
+        log = str(Path(downloads).parent / "firefox.log")
+        self.client = Marionette(bin=program, headless=True, prefs=wanted, gecko_log=log)
         self.client.start_session()
         self.name = "{browserName} {browserVersion}".format(**self.client.session_capabilities)
 
