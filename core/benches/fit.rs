@@ -1,4 +1,5 @@
-//! What matching costs: one flight point, the line of the map, the whole speed range, a map over speed and height.
+//! What matching costs: one flight point, the line of the map, the whole speed range, a map over speed and
+//! height.
 
 use std::hint::black_box;
 

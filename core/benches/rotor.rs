@@ -1,4 +1,5 @@
-//! What an analysis, a departure map and an edit cost, and how near the solve is to the cost of its section lookups alone.
+//! What an analysis, a departure map and an edit cost, and how near the solve is to the cost of its section
+//! lookups alone.
 
 use std::hint::black_box;
 

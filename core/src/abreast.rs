@@ -3,8 +3,8 @@
 use std::panic::resume_unwind;
 use std::thread::{Builder, scope};
 
-/// What two pieces of work give that have nothing to do with one another: the first on a thread of its own where there are threads, else one after the other, as in a browser.
-/// The answers are the same either way.
+/// What two pieces of work give that have nothing to do with one another: the first on a thread of its own
+/// where there are threads, else one after the other, as in a browser. The answers are the same either way.
 pub(crate) fn abreast<A: Send, B>(first: impl Fn() -> A + Sync, second: impl FnOnce() -> B) -> (A, B) {
     if cfg!(target_family = "wasm") {
         return (first(), second());

@@ -1,9 +1,9 @@
 //! The standard atmosphere to 20 km, with a temperature offset.
 //!
 //! Method: ISO 2533:1975 (identical with the US Standard Atmosphere 1976 below 32 km): a temperature lapse of
-//! 6.5 K/km up to 11 km of geopotential height, then 216.65 K. The offset changes the temperature and, through the gas
-//! law, the density; the pressure stays that of the pressure altitude. Viscosity by Sutherland's law with the
-//! coefficients of the US Standard Atmosphere 1976.
+//! 6.5 K/km up to 11 km of geopotential height, then 216.65 K. The offset changes the temperature and,
+//! through the gas law, the density; the pressure stays that of the pressure altitude. Viscosity by
+//! Sutherland's law with the coefficients of the US Standard Atmosphere 1976.
 
 use serde::Serialize;
 use thiserror::Error;

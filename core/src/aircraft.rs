@@ -1,6 +1,7 @@
 //! What the aircraft asks for: drag, weight, the speeds that follow from a parabolic polar.
 //!
-//! `CD = cd0 + k CL²`, lift equal to weight: `D = q S cd0 + k W²/(q S)`. A multirotor asks each rotor for its share of the weight.
+//! `CD = cd0 + k CL²`, lift equal to weight: `D = q S cd0 + k W²/(q S)`. A multirotor asks each rotor for its
+//! share of the weight.
 
 mod asked;
 
@@ -47,8 +48,8 @@ pub fn propellers(aircraft: &Aircraft) -> f64 {
     })
 }
 
-/// Thrust asked of one propeller for level flight (aeroplane) or to hold the weight (multirotor), N. `None` for an
-/// aeroplane at rest, which no thrust holds up.
+/// Thrust asked of one propeller for level flight (aeroplane) or to hold the weight (multirotor), N. `None`
+/// for an aeroplane at rest, which no thrust holds up.
 #[must_use]
 pub fn thrust_asked_n(aircraft: &Aircraft, air: &Air, airspeed_m_s: f64) -> Option<f64> {
     let all = match aircraft {

@@ -1,11 +1,14 @@
-//! From the drawing to wood: where every section stands, the solid, the blank, the sheets of paper and the files.
+//! From the drawing to wood: where every section stands, the solid, the blank, the sheets of paper and the
+//! files.
 //!
-//! Frame: the first blade along `x`, the direction in which it turns along `y` (a propeller that turns clockwise seen
-//! from behind; against it for the other), the direction of flight along `z`. The rear of the blank looks aft and lies
-//! down on the bench; its front looks ahead. Of the blade the flat, rear side is the face, the cambered, forward one the back (common practice). Lengths are metres in the geometry and millimetres on paper.
+//! Frame: the first blade along `x`, the direction in which it turns along `y` (a propeller that turns
+//! clockwise seen from behind; against it for the other), the direction of flight along `z`. The rear of the
+//! blank looks aft and lies down on the bench; its front looks ahead. Of the blade the flat, rear side is the
+//! face, the cambered, forward one the back (common practice). Lengths are metres in the geometry and
+//! millimetres on paper.
 //!
-//! Sections lie in planes square to the blade, each with its centroid (or a point of its chord line) on the stacking
-//! line. Nothing here judges strength.
+//! Sections lie in planes square to the blade, each with its centroid (or a point of its chord line) on the
+//! stacking line. Nothing here judges strength.
 
 mod blank;
 pub(crate) mod draw;

@@ -1,9 +1,9 @@
 //! The blade as drawn: chord, blade angle, thickness and section at any radius.
 //!
-//! Between stations chord, angle and thickness follow a monotone cubic in radius; sections blend linearly in radius
-//! from one station's to the next. Inboard of the first station and outboard of the last one everything is held.
-//! Blade angles are kept to the chord line: an angle measured on the flat face is turned by the section's own angle
-//! between face and chord line at that thickness.
+//! Between stations chord, angle and thickness follow a monotone cubic in radius; sections blend linearly in
+//! radius from one station's to the next. Inboard of the first station and outboard of the last one
+//! everything is held. Blade angles are kept to the chord line: an angle measured on the flat face is turned
+//! by the section's own angle between face and chord line at that thickness.
 
 mod line;
 
@@ -96,7 +96,8 @@ impl Blade {
         Self::with(job, &[])
     }
 
-    /// The blade of a job whose sections are the same as those of a job already made ready, whose families are taken over.
+    /// The blade of a job whose sections are the same as those of a job already made ready, whose families
+    /// are taken over.
     ///
     /// # Errors
     /// Only for a job that [`Job::check`] refuses.
@@ -154,7 +155,8 @@ impl Blade {
         self.stations.iter().map(|s| s.0)
     }
 
-    /// Angle (rad) from the flat face up to the chord line at a radius (m); `None` where there is no flat face.
+    /// Angle (rad) from the flat face up to the chord line at a radius (m); `None` where there is no flat
+    /// face.
     #[must_use]
     pub fn face_to_chord_rad(&self, radius_m: f64) -> Option<f64> {
         self.face_to_chord_of(radius_m, self.thickness.at(radius_m))

@@ -1,4 +1,5 @@
-//! What must be said wherever a blade's strength is shown, on every sheet of paper, and beside every file it can be made from.
+//! What must be said wherever a blade's strength is shown, on every sheet of paper, and beside every file it
+//! can be made from.
 
 use crate::job::Job;
 use crate::wood::is_wood;
@@ -6,7 +7,8 @@ use crate::wood::is_wood;
 /// How many sentences of caution there are.
 pub(crate) const CAUTION_COUNT: usize = 6;
 
-/// The usual cautions, a sentence each; short enough for one line of a sheet. What they say of the material is that of the job's: wood, and so where it names none.
+/// The usual cautions, a sentence each; short enough for one line of a sheet. What they say of the material
+/// is that of the job's: wood, and so where it names none.
 #[must_use]
 pub fn cautions(job: &Job) -> [&'static str; CAUTION_COUNT] {
     let [material, bolts] = if job.wood.as_ref().is_none_or(is_wood) {

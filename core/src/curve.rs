@@ -1,8 +1,8 @@
 //! Monotone cubic interpolation (PCHIP), as used for tables, stations and engine curves.
 //!
-//! Method: F. N. Fritsch and J. Butland, SIAM J. Sci. Stat. Comput. 5(2), 1984: Hermite cubics whose slopes are weighted
-//! harmonic means of the neighbouring secants, so that no overshoot appears between the points. End slopes by the
-//! three-point formula limited to keep the shape.
+//! Method: F. N. Fritsch and J. Butland, SIAM J. Sci. Stat. Comput. 5(2), 1984: Hermite cubics whose slopes
+//! are weighted harmonic means of the neighbouring secants, so that no overshoot appears between the points.
+//! End slopes by the three-point formula limited to keep the shape.
 
 /// Value and slope of a cubic at one place.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -13,7 +13,8 @@ pub struct Jet {
     pub slope: f64,
 }
 
-/// A monotone cubic through points with strictly rising abscissae. Outside the points it holds the end values.
+/// A monotone cubic through points with strictly rising abscissae. Outside the points it holds the end
+/// values.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Curve {
     x: Vec<f64>,
@@ -23,7 +24,8 @@ pub struct Curve {
 }
 
 impl Curve {
-    /// A curve through the points; `None` unless there is at least one, all are finite and `x` rises strictly.
+    /// A curve through the points; `None` unless there is at least one, all are finite and `x` rises
+    /// strictly.
     #[must_use]
     pub fn new(x: Vec<f64>, y: Vec<f64>) -> Option<Self> {
         let rising = x.windows(2).all(|w| w[0] < w[1]);

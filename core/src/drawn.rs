@@ -1,7 +1,8 @@
-//! The blade as drawn, station by station, before the hub turns it: what a table of stations shows and what an edit writes.
+//! The blade as drawn, station by station, before the hub turns it: what a table of stations shows and what
+//! an edit writes.
 //!
-//! An angle may be typed to the chord line or on the flat face, or as a pitch; a station keeps one of them, to the
-//! propeller's own reference. The functions here go from one to the other without changing the blade.
+//! An angle may be typed to the chord line or on the flat face, or as a pitch; a station keeps one of them,
+//! to the propeller's own reference. The functions here go from one to the other without changing the blade.
 
 use std::f64::consts::TAU;
 
@@ -55,8 +56,8 @@ fn station(blade: &Blade, reference: AngleReference, radius_m: f64) -> DrawnStat
     }
 }
 
-/// The angle (degrees) a station keeps in the file when `angle_deg` was read to `read_on`; `None` where there is no
-/// such station or no flat face to turn by.
+/// The angle (degrees) a station keeps in the file when `angle_deg` was read to `read_on`; `None` where there
+/// is no such station or no flat face to turn by.
 #[must_use]
 pub fn kept_angle_deg(job: &Job, index: usize, read_on: AngleReference, angle_deg: f64) -> Option<f64> {
     let reference = job.propeller.angle_reference;
@@ -72,8 +73,8 @@ pub fn kept_angle_deg(job: &Job, index: usize, read_on: AngleReference, angle_de
     })
 }
 
-/// The same blade measured by another reference: every station's angle is rewritten. `None` where a station has no flat
-/// face or the job is one that [`Job::check`] refuses.
+/// The same blade measured by another reference: every station's angle is rewritten. `None` where a station
+/// has no flat face or the job is one that [`Job::check`] refuses.
 ///
 /// ```
 /// use spokeshave::{drawn::measured_by, job::{AngleReference, DEMOS, Job}};
@@ -91,16 +92,17 @@ pub fn measured_by(job: &Job, reference: AngleReference) -> Option<Job> {
             AngleReference::ChordLine => drawn.angle_deg,
             AngleReference::FlatFace => drawn.face_angle_deg?,
         };
-        // Eight decimals are a ten-thousandth of a second of arc: nothing on a blade, and the file stays readable.
+        // Eight decimals are a ten-thousandth of a second of arc: nothing on a blade, and the file stays
+        // readable.
         station.angle_deg = Some((angle_deg * 1e8).round() / 1e8);
         station.pitch_m = None;
     }
     Some(other)
 }
 
-/// The job with a station more, lying on the blade as it is at a share of the tip radius, with the section of its inner
-/// neighbour. The blade itself may change a little beside it, since its curves now pass through one more point. `None`
-/// where a station stands already or for a job that [`Job::check`] refuses.
+/// The job with a station more, lying on the blade as it is at a share of the tip radius, with the section of
+/// its inner neighbour. The blade itself may change a little beside it, since its curves now pass through one
+/// more point. `None` where a station stands already or for a job that [`Job::check`] refuses.
 #[must_use]
 pub fn with_station(job: &Job, radius_fraction: f64) -> Option<Job> {
     let blade = Blade::new(job).ok()?;

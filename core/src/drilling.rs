@@ -37,7 +37,8 @@ impl Pattern {
     #[must_use]
     pub fn of(job: &Job) -> Option<Self> {
         match job.bench.as_ref().and_then(|b| b.flange) {
-            // SAE No. 2 (AS127, 1947): six studs on a 4 3/4 in circle, 1/2 in; No. 1: six of 3/8 in on 4 3/8 in, from memory.
+            // SAE No. 2 (AS127, 1947): six studs on a 4 3/4 in circle, 1/2 in; No. 1: six of 3/8 in on 4 3/8
+            // in, from memory.
             Some(Flange::Sae2) => Some(Self::standard(4.75, 0.5, "SAE No. 2 flange")),
             Some(Flange::Sae1) => Some(Self::standard(4.375, 0.375, "SAE No. 1 flange (from memory)")),
             None => Self::own(job),

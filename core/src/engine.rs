@@ -1,12 +1,13 @@
 //! What the shaft offers: piston engines by their full-throttle curve, electric motors by their constants.
 //!
-//! Piston: full-throttle power by a monotone cubic (or straight lines) in engine rpm, never extrapolated; at height
-//! by A. W. Gagg and E. V. Ferrar, SAE Trans. 29, 1934: `P/P0 = σ − (1 − σ)/7.55`, or held up to a height and by the
-//! same law from there.
+//! Piston: full-throttle power by a monotone cubic (or straight lines) in engine rpm, never extrapolated; at
+//! height by A. W. Gagg and E. V. Ferrar, SAE Trans. 29, 1934: `P/P0 = σ − (1 − σ)/7.55`, or held up to a
+//! height and by the same law from there.
 //!
-//! Electric: the first-order motor, `Q = Kt (I − I0)` with the same no-load current `I0` at every voltage and rpm, `Kt = 30/(π Kv)`, `I = (d Voc − n/Kv)/(Rm + Rc + N d² Rb)` at
-//! duty d, with the sag of the battery that N motors share; the current limit holds the current. All rpm are of the
-//! propeller unless they say otherwise.
+//! Electric: the first-order motor, `Q = Kt (I − I0)` with the same no-load current `I0` at every voltage and
+//! rpm, `Kt = 30/(π Kv)`, `I = (d Voc − n/Kv)/(Rm + Rc + N d² Rb)` at duty d, with the sag of the battery
+//! that N motors share; the current limit holds the current. All rpm are of the propeller unless they say
+//! otherwise.
 
 use crate::air::Air;
 use crate::job::{Engine, Factors};
@@ -49,8 +50,9 @@ impl Shaft {
         self
     }
 
-    /// The same with the corner at a motor's current limit rounded off over a share of it, on the safe side: what follows from it then
-    /// changes smoothly with the propeller. `None` where there is no such corner.
+    /// The same with the corner at a motor's current limit rounded off over a share of it, on the safe side:
+    /// what follows from it then changes smoothly with the propeller. `None` where there is no such
+    /// corner.
     #[must_use]
     pub fn rounded(&self, share: f64) -> Option<Self> {
         let Self::Electric(e) = self else { return None };
@@ -94,9 +96,9 @@ impl Shaft {
         }
     }
 
-    /// Shaft power at a propeller rpm and a throttle setting (0 to 1), W. Below or above the curve its end power is
-    /// held; ask [`Shaft::rpm_range`]. For a piston engine the setting is the share of full-throttle power, for a
-    /// motor the duty.
+    /// Shaft power at a propeller rpm and a throttle setting (0 to 1), W. Below or above the curve its end
+    /// power is held; ask [`Shaft::rpm_range`]. For a piston engine the setting is the share of
+    /// full-throttle power, for a motor the duty.
     #[must_use]
     pub fn power_w(&self, rpm: f64, air: &Air, throttle: f64) -> f64 {
         match self {
@@ -105,8 +107,8 @@ impl Shaft {
         }
     }
 
-    /// Full-throttle shaft power at a propeller rpm, W; `None` outside the curve, where nothing is known, and where
-    /// there is none.
+    /// Full-throttle shaft power at a propeller rpm, W; `None` outside the curve, where nothing is known, and
+    /// where there is none.
     #[must_use]
     pub fn available_w(&self, rpm: f64, air: &Air) -> Option<f64> {
         let (low, high) = self.rpm_range();
@@ -114,8 +116,8 @@ impl Shaft {
         within.then(|| self.power_w(rpm, air, 1.0)).filter(|power| *power > 0.0)
     }
 
-    /// Fuel mass flow at a propeller rpm and shaft power, kg/s, where the consumption is given; by the load only
-    /// where the full-throttle power is known. The ends of a consumption by the load are held.
+    /// Fuel mass flow at a propeller rpm and shaft power, kg/s, where the consumption is given; by the load
+    /// only where the full-throttle power is known. The ends of a consumption by the load are held.
     #[must_use]
     pub fn fuel_kg_s(&self, rpm: f64, power_w: f64, air: &Air) -> Option<f64> {
         match self {
@@ -124,8 +126,9 @@ impl Shaft {
         }
     }
 
-    /// How long the fuel, or the usable charge, feeds all engines at a propeller rpm and shaft power of each, s. Fuel
-    /// and battery are the aircraft's. `None` where they are not given or empty, the load cannot be met or nothing is drawn.
+    /// How long the fuel, or the usable charge, feeds all engines at a propeller rpm and shaft power of each,
+    /// s. Fuel and battery are the aircraft's. `None` where they are not given or empty, the load cannot
+    /// be met or nothing is drawn.
     #[must_use]
     pub fn endurance_s(&self, rpm: f64, power_w: f64, air: &Air, engines: f64) -> Option<f64> {
         let (store, drain) = match self {
@@ -141,8 +144,8 @@ impl Shaft {
         (drain > 0.0 && store > 0.0).then(|| store / (drain * engines))
     }
 
-    /// The electric side at a propeller rpm and shaft power; `None` for a piston engine or where no duty up to 1
-    /// gives it.
+    /// The electric side at a propeller rpm and shaft power; `None` for a piston engine or where no duty up
+    /// to 1 gives it.
     #[must_use]
     pub fn electrics(&self, rpm: f64, power_w: f64) -> Option<Electrics> {
         match self {

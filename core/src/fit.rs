@@ -1,9 +1,10 @@
 //! Where propeller, engine and aircraft meet: from a flight point's setting to a condition of the propeller.
 //!
-//! At full throttle the propeller takes what the shaft gives: the rpm is sought over the engine's range, and where
-//! the two meet more than once the highest rpm counts at which the propeller's demand rises through the offer, for
-//! that one is stable. In level flight thrust equals drag, that of the slipstream included. A constant-speed
-//! propeller holds its rpm and turns its blades between its stops instead; at a stop it is a fixed one.
+//! At full throttle the propeller takes what the shaft gives: the rpm is sought over the engine's range, and
+//! where the two meet more than once the highest rpm counts at which the propeller's demand rises through the
+//! offer, for that one is stable. In level flight thrust equals drag, that of the slipstream included. A
+//! constant-speed propeller holds its rpm and turns its blades between its stops instead; at a stop it is a
+//! fixed one.
 
 use crate::air::Air;
 use crate::aircraft::{speeds, thrust_asked_n};
@@ -81,7 +82,8 @@ pub fn condition(rig: &Rig, point: &FlightPoint, air: Air) -> Result<Condition, 
     }
 }
 
-/// Whether a flight point has an aeroplane fly slower than its stall, whatever the setting; standing still is no flight but where it is to be level.
+/// Whether a flight point has an aeroplane fly slower than its stall, whatever the setting; standing still is
+/// no flight but where it is to be level.
 #[must_use]
 pub fn slower_than_stall(rig: &Rig, point: &FlightPoint, air: &Air) -> bool {
     let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return false };
@@ -111,7 +113,8 @@ pub struct Spare {
     pub given_w: f64,
 }
 
-/// What the engine has to spare at a condition at which the propeller takes a power, W; `None` without an engine.
+/// What the engine has to spare at a condition at which the propeller takes a power, W; `None` without an
+/// engine.
 #[must_use]
 pub fn spare(rig: &Rig, at: &Condition, taken_w: f64) -> Option<Spare> {
     let shaft = rig.shaft.as_ref()?;

@@ -1,9 +1,9 @@
-//! Spokeshave fits a propeller to one particular aircraft and engine, and shows how far each station of the blade departs
-//! from its angle of best lift-to-drag.
+//! Spokeshave fits a propeller to one particular aircraft and engine, and shows how far each station of the
+//! blade departs from its angle of best lift-to-drag.
 //!
-//! One direction: job file → [`job::Job`] → [`rig::Rig`] → computation ([`rotor`]) → plain results ([`result`]).
-//! The library does no input or output and holds no state; angles are radians and units SI inside, the names of
-//! results say otherwise (`_deg`).
+//! One direction: job file → [`job::Job`] → [`rig::Rig`] → computation ([`rotor`]) → plain results
+//! ([`result`]). The library does no input or output and holds no state; angles are radians and units SI
+//! inside, the names of results say otherwise (`_deg`).
 
 mod abreast;
 pub mod air;

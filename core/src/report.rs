@@ -122,7 +122,8 @@ pub fn station(rotor: &Rotor, ring: &Ring, at: &Condition) -> StationResult {
     s
 }
 
-/// Coefficients over angle of attack as the station's section has them at a condition, −12° to 24° by quarter degrees.
+/// Coefficients over angle of attack as the station's section has them at a condition, −12° to 24° by quarter
+/// degrees.
 #[must_use]
 pub fn section_curve(rotor: &Rotor, ring: &Ring, at: &Condition) -> Vec<SectionPoint> {
     let element = rotor.element(ring, at).0;

@@ -1,5 +1,5 @@
-//! Results as plain data. Names and units are those of the JSON output; figures without an answer are `None`, never
-//! NaN.
+//! Results as plain data. Names and units are those of the JSON output; figures without an answer are `None`,
+//! never NaN.
 
 use serde::Serialize;
 
@@ -82,7 +82,8 @@ pub enum State {
     EngineTooWeak,
     /// No rpm up to a tip Mach number of 1.2 absorbs the power or gives the thrust asked for.
     OutOfReach,
-    /// Slower than the stall, and not to be flown level; in an envelope said of every level flight slower than the stall.
+    /// Slower than the stall, and not to be flown level; in an envelope said of every level flight slower
+    /// than the stall.
     BelowStall,
 }
 
@@ -210,7 +211,8 @@ pub struct Figures {
     pub ct_over_cq: Option<f64>,
     /// `T V/P`, when thrust, speed and power are positive.
     pub efficiency: Option<f64>,
-    /// What an actuator disc of this size, without drag or swirl, would reach at this thrust: `2/(1 + sqrt(1 + Tc))`.
+    /// What an actuator disc of this size, without drag or swirl, would reach at this thrust: `2/(1 + sqrt(1
+    /// + Tc))`.
     pub ideal_efficiency: Option<f64>,
     /// `T^1.5/(sqrt(2 ρ π R²) P)` at rest.
     pub figure_of_merit: Option<f64>,
@@ -236,8 +238,8 @@ pub struct Figures {
     pub slip: Option<f64>,
 }
 
-/// What engine and aircraft make of a propeller's condition. `None` where the job has no engine or aircraft, or it
-/// does not apply.
+/// What engine and aircraft make of a propeller's condition. `None` where the job has no engine or aircraft,
+/// or it does not apply.
 #[derive(Clone, Debug, Default, PartialEq, Serialize)]
 pub struct Meeting {
     /// Engine or motor rpm.
@@ -248,8 +250,8 @@ pub struct Meeting {
     pub power_share: Option<f64>,
     /// Thrust over all propellers, N.
     pub total_thrust_n: Option<f64>,
-    /// Thrust that level flight at this speed asks of all propellers, the drag with what the slipstream adds to it,
-    /// or the weight of a multirotor, N.
+    /// Thrust that level flight at this speed asks of all propellers, the drag with what the slipstream adds
+    /// to it, or the weight of a multirotor, N.
     pub asked_n: Option<f64>,
     /// Rate of climb `(T − D) V/W` of an aeroplane, lift taken as weight, m/s.
     pub rate_of_climb_m_s: Option<f64>,

@@ -133,7 +133,8 @@ impl Rig {
         self.condition(index).map_or_else(Vec::new, |at| coefficient_curves(&self.rotor, &at, steps))
     }
 
-    /// Lift, drag and lift-to-drag of a station's section over the angle of attack, as it works at a flight point.
+    /// Lift, drag and lift-to-drag of a station's section over the angle of attack, as it works at a flight
+    /// point.
     #[must_use]
     pub fn section_curve(&self, point: usize, station: usize) -> Vec<SectionPoint> {
         let radius = self.rotor.blade.station_radii_m().nth(station);
@@ -141,8 +142,8 @@ impl Rig {
         report::section_curve(&self.rotor, &self.rotor.ring(r), &at)
     }
 
-    /// The departure map at a flight point's air, along [`fit::line`] or [`fit::level_line`], from the hub to the tip.
-    /// `None` where the flight point has no answer or nothing is flown level.
+    /// The departure map at a flight point's air, along [`fit::line`] or [`fit::level_line`], from the hub to
+    /// the tip. `None` where the flight point has no answer or nothing is flown level.
     #[must_use]
     pub fn map(&self, index: usize, along: Along, speeds: u32, radii: u32) -> Option<DepartureMap> {
         let at = self.condition(index)?;
@@ -153,9 +154,9 @@ impl Rig {
         (!line.is_empty()).then(|| departure_map(&self.rotor, &line, &self.map_radii_m(radii)))
     }
 
-    /// The whole fit at a flight point's air: the speed range with `speeds` speeds, take-off, ceilings. What a
-    /// variable pitch is worth is left to [`Rig::pitch_worth`]. `None` when there is no such point, no engine, or the
-    /// engine cannot turn the propeller.
+    /// The whole fit at a flight point's air: the speed range with `speeds` speeds, take-off, ceilings. What
+    /// a variable pitch is worth is left to [`Rig::pitch_worth`]. `None` when there is no such point, no
+    /// engine, or the engine cannot turn the propeller.
     #[must_use]
     pub fn fit(&self, index: usize, speeds: u32) -> Option<Fit> {
         let point = self.job.flight_points.get(index)?;

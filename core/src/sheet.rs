@@ -1,7 +1,8 @@
 //! Readings as comma-separated text: a line of headings with units, then a line for each reading.
 //!
-//! Columns are divided by commas, semicolons or tabs; with semicolons or tabs decimals may have a comma. Lines that
-//! begin with `#` and empty lines are skipped. Every fault is told with line and column, and with its likely cause.
+//! Columns are divided by commas, semicolons or tabs; with semicolons or tabs decimals may have a comma.
+//! Lines that begin with `#` and empty lines are skipped. Every fault is told with line and column, and with
+//! its likely cause.
 
 use std::ops::RangeInclusive;
 
@@ -17,8 +18,8 @@ pub struct Quantity {
     pub name: &'static str,
     /// Names it may have in a heading, in small letters, words joined by underscores.
     pub names: &'static [&'static str],
-    /// Units of a heading, each with its worth and its zero in the first: `value * worth + zero`. In a heading they may be in
-    /// small or capital letters. One that is empty stands for no unit.
+    /// Units of a heading, each with its worth and its zero in the first: `value * worth + zero`. In a
+    /// heading they may be in small or capital letters. One that is empty stands for no unit.
     pub units: &'static [(&'static str, f64, f64)],
     /// What is allowed, in the first unit.
     pub allowed: RangeInclusive<f64>,
@@ -63,7 +64,8 @@ impl<'q> Sheet<'q> {
     /// Reads a sheet for some quantities.
     ///
     /// # Errors
-    /// Too long or empty a text, a heading without its unit, two columns for one quantity, a line that is too wide.
+    /// Too long or empty a text, a heading without its unit, two columns for one quantity, a line that is too
+    /// wide.
     pub fn read(text: &str, quantities: &'q [Quantity]) -> Result<Self, SheetError> {
         let whole = |message: String| SheetError { line: 1, column: None, message };
         if text.len() > MOST_BYTES {
@@ -221,7 +223,8 @@ impl<'q> Sheet<'q> {
     }
 }
 
-/// What a value out of range most likely is: the unit whose worth brings it into what is usual, in words to append.
+/// What a value out of range most likely is: the unit whose worth brings it into what is usual, in words to
+/// append.
 #[must_use]
 pub fn likely(value: f64, usual: RangeInclusive<f64>, units: &[(f64, &str)]) -> String {
     perhaps(units.iter().find(|(worth, _)| usual.contains(&(value * worth))).map(|(_, unit)| *unit))

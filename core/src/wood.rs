@@ -1,7 +1,8 @@
 //! Will the blade hold: material, real sections, loads, stress, vibration, weight.
 //!
-//! The blade is a slender beam clamped at the hub, its sections threaded at their centroids on the stacking line or beside it, and
-//! leaning by a rake. [`beam`] is plain mathematics on arrays; [`section`] measures the outline; the rest puts a job's blade through both.
+//! The blade is a slender beam clamped at the hub, its sections threaded at their centroids on the stacking
+//! line or beside it, and leaning by a rake. [`beam`] is plain mathematics on arrays; [`section`] measures
+//! the outline; the rest puts a job's blade through both.
 
 mod assumptions;
 pub mod beam;

@@ -292,7 +292,8 @@ fn a_wrong_mass_is_told_once() {
     assert!(message.starts_with("aircraft.mass_kg: 0") && !message.contains("fuel"), "{message}");
 }
 
-/// A governor holds the propeller's rpm; the limit is the engine's, or the end of its curve where none is given.
+/// A governor holds the propeller's rpm; the limit is the engine's, or the end of its curve where none is
+/// given.
 #[test]
 fn a_governor_stays_within_the_engine_through_its_gear() {
     let mut job = Job::from_json(DEMOS[0].json).unwrap();

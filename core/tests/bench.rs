@@ -66,7 +66,8 @@ fn the_face_line_touches_the_section_and_never_cuts_into_it() {
             // The marks stand on the outline of the plan, outside the section.
             let [low, high] = station.ring.span(0);
             assert!(y_lead >= high && y_trail <= low, "station {}", station.number);
-            // The slope is what the protractor reads on a flat face, and that of the section's table, where it has one of this thickness.
+            // The slope is what the protractor reads on a flat face, and that of the section's table, where
+            // it has one of this thickness.
             let Some(face_rad) = station.face_rad else { continue };
             let slope = (lead - trail).atan2(y_lead - y_trail);
             assert!((slope - face_rad).abs() < 1e-9, "station {}: {slope} {face_rad}", station.number);
@@ -163,7 +164,8 @@ fn all_text_stays_on_its_sheet_and_apart() {
     }
 }
 
-/// Every line at the blade angle on the cards is at that angle, and carries its name; the pitch axis runs down to the wood.
+/// Every line at the blade angle on the cards is at that angle, and carries its name; the pitch axis runs
+/// down to the wood.
 #[test]
 fn cards_show_the_blade_angle_and_the_pitch_axis() {
     for job in faces() {

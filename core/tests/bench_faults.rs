@@ -69,7 +69,8 @@ fn what_cannot_be_made_is_said_with_its_place_and_its_amount() {
             if (reach_mm - 60.325).abs() < 1e-6 && (by_mm - 6.425).abs() < 1e-6)),
         "{wide_flange:?}"
     );
-    // Two stations half a millimetre apart, the chord turned by half a turn between them: the surface turns through itself.
+    // Two stations half a millimetre apart, the chord turned by half a turn between them: the surface turns
+    // through itself.
     let wrung = with(|job| {
         let mut next = job.propeller.stations[0].clone();
         next.radius_fraction += 0.0006;

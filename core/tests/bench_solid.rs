@@ -116,8 +116,8 @@ fn the_other_sense_of_turning_is_the_mirror_image() {
     for (p, q) in right.vertices.iter().zip(&left.vertices) {
         assert_eq!([p[0], -p[1], p[2]], *q);
     }
-    // Turning clockwise seen from behind, a blade that points up has its leading edge on the right of a person behind
-    // it: with the tip towards the eye and the front up, on the right as well.
+    // Turning clockwise seen from behind, a blade that points up has its leading edge on the right of a
+    // person behind it: with the tip towards the eye and the front up, on the right as well.
     let lead = |b: &Bench| b.on_paper(b.stations[5].ring.leading_edge())[0];
     assert!(lead(&a) > 0.0 && lead(&b) < 0.0);
 }

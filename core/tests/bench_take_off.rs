@@ -18,7 +18,8 @@ fn rows_of(sheet: &Sheet) -> Vec<Vec<String>> {
     rows.map(|row| row.iter().map(|t| t.words.clone()).collect()).collect()
 }
 
-/// The demo with readings at all but the last two stations: the first blade 0.6 degrees coarse and left full, the second as drawn.
+/// The demo with readings at all but the last two stations: the first blade 0.6 degrees coarse and left full,
+/// the second as drawn.
 fn carved() -> Job {
     let mut job = demo(0);
     let rig = Rig::new(&job).unwrap();

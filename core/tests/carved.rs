@@ -9,7 +9,8 @@ pub(crate) fn demo() -> Rig {
     Rig::new(&Job::from_json(DEMOS[0].json).unwrap()).unwrap()
 }
 
-/// The demo with readings of every blade at every station, off by what is told for blade and station: degrees, mm, mm.
+/// The demo with readings of every blade at every station, off by what is told for blade and station:
+/// degrees, mm, mm.
 pub(crate) fn carved_by(off: impl Fn(usize, usize) -> [f64; 3]) -> Rig {
     let rig = demo();
     let blade = |b: usize| CarvedBlade {
@@ -57,8 +58,9 @@ fn blades_as_drawn_do_what_the_drawing_does() {
     }
 }
 
-/// Two blades of one shape, one of them wider and thicker everywhere by 1 % so that its sections are 2.01 % heavier: the unbalance is that share of the mass
-/// moment, and turning it gives m r ω² (any text of mechanics; common practice).
+/// Two blades of one shape, one of them wider and thicker everywhere by 1 % so that its sections are 2.01 %
+/// heavier: the unbalance is that share of the mass moment, and turning it gives m r ω² (any text of
+/// mechanics; common practice).
 #[test]
 fn unequal_masses_shake_by_their_moment_times_the_square_of_the_speed() {
     let rig = carved_by(|_, _| [0.0; 3]);
@@ -80,8 +82,9 @@ fn unequal_masses_shake_by_their_moment_times_the_square_of_the_speed() {
     assert!((at_tip - found.balance.unbalance_kg_m).abs() < 1e-12);
 }
 
-/// A blade whose masses lie ahead by a (r − h), as a straight lean from the hub at h does, turns with the moment ω² a (I − h S) across the shaft, I and S its
-/// moments of inertia and of mass (any text of mechanics; common practice).
+/// A blade whose masses lie ahead by a (r − h), as a straight lean from the hub at h does, turns with the
+/// moment ω² a (I − h S) across the shaft, I and S its moments of inertia and of mass (any text of mechanics;
+/// common practice).
 #[test]
 fn a_blade_out_of_track_turns_its_moment_with_the_shaft() {
     let mut rig = carved_by(|_, _| [0.0; 3]);
@@ -109,7 +112,8 @@ fn a_blade_out_of_track_turns_its_moment_with_the_shaft() {
     assert!(even.flight_points[0].once_per_turn.unwrap().track_moment_n_m.unwrap() < 1e-9);
 }
 
-/// Loads of unequal blades lie between those of propellers all of one blade and of the other, and add up to the mean to first order.
+/// Loads of unequal blades lie between those of propellers all of one blade and of the other, and add up to
+/// the mean to first order.
 #[test]
 fn a_blade_of_larger_angle_carries_more_and_the_sum_is_that_of_the_mean() {
     let found =

@@ -43,7 +43,8 @@ fn a_blade_left_full_is_brought_to_the_drawing() {
     assert!(worst(&before) > 0.5 && worst(after) < 0.25, "{} {}", worst(&before), worst(after));
     let once = |c: &spokeshave::result::Carved| c.flight_points[1].once_per_turn.unwrap().moment_n_m;
     assert!(once(after) < 0.1 * once(&before), "{} {}", once(&before), once(after));
-    // Measured once more and analysed from the start, the planned blade has the departures that were predicted.
+    // Measured once more and analysed from the start, the planned blade has the departures that were
+    // predicted.
     let again = carved::analyse(&measured_again(&rig, &plan)).unwrap();
     for (a, b) in again.flight_points.iter().zip(&after.flight_points) {
         for (s, t) in a.stations.iter().zip(&b.stations) {
@@ -54,8 +55,9 @@ fn a_blade_left_full_is_brought_to_the_drawing() {
     }
 }
 
-/// A blade too coarse with no chord to spare: turning it down planes the thin trailing edge away. With one blade's own angle `a(t)` and lost share of chord `s(t)` after
-/// a turn t, the plan's turn has the least `(a − wanted)² + (0.123 s)²`, so that neither less nor more of it is better.
+/// A blade too coarse with no chord to spare: turning it down planes the thin trailing edge away. With one
+/// blade's own angle `a(t)` and lost share of chord `s(t)` after a turn t, the plan's turn has the least `(a
+/// − wanted)² + (0.123 s)²`, so that neither less nor more of it is better.
 #[test]
 fn chord_that_would_be_lost_is_weighed_against_the_angle() {
     let mut rig = carved_by(|_, _| [0.8, 0.0, 1.5]);
@@ -88,7 +90,8 @@ fn chord_that_would_be_lost_is_weighed_against_the_angle() {
 
 #[test]
 fn what_cannot_be_reached_evens_the_blades() {
-    // Thin blades may not be planed: the limit holds, the blade that stands too flat stays so, the other comes to meet it only as far as the limit.
+    // Thin blades may not be planed: the limit holds, the blade that stands too flat stays so, the other
+    // comes to meet it only as far as the limit.
     let mut rig = carved_by(|b, _| [if b == 0 { -1.0 } else { 0.0 }, 0.0, 0.0]);
     rig.job.carved.as_mut().unwrap().least_thickness_share = 1.0;
     let plan = carved::plan(&rig, 1).unwrap();

@@ -91,7 +91,8 @@ fn doubts_name_the_likely_cause() {
 
 #[test]
 fn what_is_hard_to_believe_is_left_out_until_it_is_confirmed() {
-    // One angle of blade 2 read from the shaft, and nothing else wrong: the neighbours and the other blade stay as they are.
+    // One angle of blade 2 read from the shaft, and nothing else wrong: the neighbours and the other blade
+    // stay as they are.
     let mut rig = carved_by(|_, _| [0.0; 3]);
     let at = |rig: &mut Rig, change: &dyn Fn(&mut BladeReading)| {
         change(&mut rig.job.carved.as_mut().unwrap().blades[1].readings[6]);

@@ -76,7 +76,8 @@ fn past_its_coarse_stop_it_is_held_at_the_limit_rpm_there() {
     assert!((thrust / same - 1.0).abs() < 1e-9);
 }
 
-/// A governor set above the limit rpm does not keep the engine from passing it: its blades wait at the fine stop.
+/// A governor set above the limit rpm does not keep the engine from passing it: its blades wait at the fine
+/// stop.
 #[test]
 fn a_governor_set_past_the_limit_rpm_is_not_trusted() {
     let mut job = governed(3100.0, -8.0, 10.0);

@@ -62,8 +62,8 @@ fn standing_at_idle_is_the_propeller_at_that_rpm_of_the_engine() {
     assert!(thrust_n(&job, -4.0) < fixed);
 }
 
-/// A freewheeling propeller turns at one advance ratio but for Reynolds and Mach numbers, so that the speed follows
-/// the limit rpm.
+/// A freewheeling propeller turns at one advance ratio but for Reynolds and Mach numbers, so that the speed
+/// follows the limit rpm.
 #[test]
 fn the_dive_follows_limit_rpm_and_pitch() {
     let job = demo(0);

@@ -174,7 +174,8 @@ fn what_a_job_lacks_is_left_out() {
     assert!(says(&idle, "Nothing is told"));
 }
 
-/// The fonts every viewer has know the letters of Windows' Western set; what the program says itself is written with these.
+/// The fonts every viewer has know the letters of Windows' Western set; what the program says itself is
+/// written with these.
 #[test]
 fn every_letter_is_one_the_fonts_have() {
     for job in [demo(0), demo(1), demo(2), full()] {

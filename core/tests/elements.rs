@@ -13,7 +13,8 @@ fn rig(stall_delay: bool, compressibility: bool) -> Rig {
     Rig::new(&job).unwrap()
 }
 
-/// Solidity `B c/(2π r)`; `3.1 (c/r)²` after Snel, Houwink and Bosschers (1994), full to 0.7 R, half at 0.75 R, none from 0.8 R on.
+/// Solidity `B c/(2π r)`; `3.1 (c/r)²` after Snel, Houwink and Bosschers (1994), full to 0.7 R, half at 0.75
+/// R, none from 0.8 R on.
 #[test]
 fn a_ring_knows_its_solidity_and_its_share_of_stall_delay() {
     let rig = rig(true, true);

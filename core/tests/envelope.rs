@@ -121,8 +121,8 @@ fn past_the_limit_rpm_the_figure_held_at_it_is_given_beside_the_state() {
     assert!(marks.limit_rpm_from_m_s.unwrap() < marks.top_speed.unwrap().airspeed_m_s);
 }
 
-/// A propeller that passes the limit rpm at rest may take more with speed, and less again: held, matched and held once more, and nowhere more power
-/// than the engine has.
+/// A propeller that passes the limit rpm at rest may take more with speed, and less again: held, matched and
+/// held once more, and nowhere more power than the engine has.
 #[test]
 fn what_is_past_the_limit_at_rest_need_not_be_in_flight() {
     let mut job = demo(0);
@@ -202,7 +202,8 @@ fn take_off_lies_between_closed_forms() {
     let rig = Rig::new(&job).unwrap();
     let found = range(&job, 60);
     let t = take_off(&rig, &found).unwrap();
-    // With constant net thrust the roll is m V²/2F: the greatest net thrust is at rest, the least at lift-off.
+    // With constant net thrust the roll is m V²/2F: the greatest net thrust is at rest, the least at
+    // lift-off.
     let thrust = |v: f64| {
         let p = found
             .points
@@ -241,7 +242,8 @@ fn at_the_service_ceiling_the_best_climb_is_half_a_metre_per_second() {
     }
 }
 
-/// Slower than the stall nothing climbs: a ceiling comes from the speeds that the wing carries, as fast as they may be.
+/// Slower than the stall nothing climbs: a ceiling comes from the speeds that the wing carries, as fast as
+/// they may be.
 #[test]
 fn ceilings_are_those_of_the_speeds_that_are_flown() {
     let mut stalls = demo(0);
@@ -329,7 +331,8 @@ fn the_roll_is_that_of_thrust_less_drag_and_friction_step_by_step_in_time() {
     }
     assert!((t.ground_roll_m / way - 1.0).abs() < 2e-3, "{t:?} {way}");
     assert!((t.ground_roll_s / time - 1.0).abs() < 2e-3, "{t:?} {time}");
-    // From there energy: 15 m and the gain of speed, over what thrust and drag leave of the weight at both ends.
+    // From there energy: 15 m and the gain of speed, over what thrust and drag leave of the weight at both
+    // ends.
     let Some(Aircraft::Aeroplane(a)) = &job.aircraft else { panic!("an aeroplane") };
     let air = Air::standard(0.0, 0.0).unwrap();
     let slope = |v: f64| (thrust(v) - drag_n(a, &air, v).unwrap()) / (430.0 * 9.806_65);

@@ -130,7 +130,8 @@ fn turned_blades_are_a_coarser_propeller() {
     near(turned.figures.blade_angle_075_deg, drawn.figures.blade_angle_075_deg.unwrap() + 2.0, 1e-9);
 }
 
-/// The demo's engine may turn at 3300 rpm and gives less than 60 kW anywhere: what is asked beyond that is told, and burns no fuel.
+/// The demo's engine may turn at 3300 rpm and gives less than 60 kW anywhere: what is asked beyond that is
+/// told, and burns no fuel.
 #[test]
 fn a_setting_beyond_the_engine_is_noted_and_tells_no_fuel() {
     let beyond = |p: &PointResult, note| p.state == State::Ok && p.notes.contains(&note);
@@ -176,8 +177,8 @@ fn a_multirotor_too_heavy_to_hover_is_told_by_how_much() {
     assert!(Rig::new(&demo(0)).unwrap().fit(0, 20).unwrap().envelope.hover_n().is_none());
 }
 
-/// An engine whose power falls before its limit: past the limit, and at the end of its power, each figure is told on its own side of what
-/// bounds it.
+/// An engine whose power falls before its limit: past the limit, and at the end of its power, each figure is
+/// told on its own side of what bounds it.
 #[test]
 fn a_limit_is_broken_exactly_where_its_figures_say_so() {
     let mut job = demo(0);

@@ -1,5 +1,5 @@
-//! Optional numbers of the job file against their closed forms: rolling friction, drag in the slipstream, blockage by
-//! the body.
+//! Optional numbers of the job file against their closed forms: rolling friction, drag in the slipstream,
+//! blockage by the body.
 
 use std::f64::consts::PI;
 
@@ -36,8 +36,8 @@ fn roll(job: &Job) -> TakeOff {
     take_off(&rig, &envelope(&rig, &point(None, Setting::FullThrottle {}), 60, &[]).unwrap()).unwrap()
 }
 
-/// What friction takes of the mean acceleration: `V²/2s` falls by `Δμ g`, but for how the thrust is spread over the
-/// roll.
+/// What friction takes of the mean acceleration: `V²/2s` falls by `Δμ g`, but for how the thrust is spread
+/// over the roll.
 #[test]
 fn rolling_friction_takes_its_share_of_the_acceleration() {
     let job = demo();

@@ -1,4 +1,5 @@
-//! The logbook: factors recovered from readings of a known engine, aircraft and blade; what cannot be told is said.
+//! The logbook: factors recovered from readings of a known engine, aircraft and blade; what cannot be told is
+//! said.
 
 use spokeshave::change::{Wanted, changes};
 use spokeshave::fit;
@@ -14,8 +15,8 @@ fn demo(i: usize) -> Job {
     Job::from_json(DEMOS[i].json).unwrap()
 }
 
-/// Numbers of a normal distribution from a fixed seed: sums of twelve of a linear congruential generator (D. E. Knuth, *The Art of Computer Programming* 2,
-/// its multiplier for 64 bits; from memory).
+/// Numbers of a normal distribution from a fixed seed: sums of twelve of a linear congruential generator (D.
+/// E. Knuth, *The Art of Computer Programming* 2, its multiplier for 64 bits; from memory).
 struct Noise(u64);
 
 impl Noise {
@@ -53,7 +54,8 @@ fn read(truth: &Rig, altitude_m: f64, speed: f64, full: bool, noise: &mut dyn Fn
     }
 }
 
-/// The light aeroplane as it truly is: the blade a degree and more off, engine weak, drag high. Built by hand, not by the factors that are sought.
+/// The light aeroplane as it truly is: the blade a degree and more off, engine weak, drag high. Built by
+/// hand, not by the factors that are sought.
 fn truth() -> (Job, Rig) {
     let job = demo(0);
     let mut altered = job.clone();
@@ -164,7 +166,8 @@ fn ground_runs_alone_do_not_tell_drag_nor_engine_from_propeller() {
     let drag = &found.found[1];
     assert!(!drag.told && (drag.value - 1.0).abs() < 1e-9 && (drag.deviation - drag.width).abs() < 1e-9);
     assert!(found.remarks.iter().any(|r| r.contains("Drag cannot be told")), "{found:?}");
-    // Linear least squares in closed form: with equal prior widths the quotient's mismatch is shared half and half.
+    // Linear least squares in closed form: with equal prior widths the quotient's mismatch is shared half and
+    // half.
     let product = found.factors.engine_power * found.factors.propeller_power;
     assert!((product - 1.0).abs() < 1e-6, "{found:?}");
     let quotient = found.factors.engine_power / found.factors.propeller_power;
@@ -174,8 +177,9 @@ fn ground_runs_alone_do_not_tell_drag_nor_engine_from_propeller() {
     assert!((pair.value - quotient).abs() < 1e-9 && pair.correlation > 0.9);
 }
 
-/// One mismatch m of variance s², two factors of variance w² before: the quotient's mean is m 2w²/(2w² + s²) and its variance 2w² s²/(2w² + s²) (linear least
-/// squares with a prior; any text of estimation, common practice).
+/// One mismatch m of variance s², two factors of variance w² before: the quotient's mean is m 2w²/(2w² + s²)
+/// and its variance 2w² s²/(2w² + s²) (linear least squares with a prior; any text of estimation, common
+/// practice).
 #[test]
 fn one_reading_gives_the_closed_form() {
     let job = demo(0);
@@ -249,7 +253,8 @@ fn a_motor_s_current_tells_the_propeller_s_power() {
     assert!((found.factors.engine_power / 0.97 - 1.0).abs() < 0.01, "{found:?}");
 }
 
-/// A run below the governed rpm has the blades on the fine stop, so that it tells as much as one of a fixed pitch; one at the governed rpm does not.
+/// A run below the governed rpm has the blades on the fine stop, so that it tells as much as one of a fixed
+/// pitch; one at the governed rpm does not.
 #[test]
 fn a_governed_propeller_tells_on_its_fine_stop() {
     let mut fixed = demo(0);

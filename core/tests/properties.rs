@@ -109,7 +109,8 @@ fn demo_at(airspeed_m_s: f64, rpm: f64) -> (Rig, Condition) {
     (rig, at)
 }
 
-/// `Ω dQ = dT (V + u) + (dQ/r) v + ρ/2 W³ B c cd dr`: the work put in is the work done on the air and the drag's.
+/// `Ω dQ = dT (V + u) + (dQ/r) v + ρ/2 W³ B c cd dr`: the work put in is the work done on the air and the
+/// drag's.
 #[test]
 fn energy_is_kept_at_every_station() {
     for (v, rpm) in [(0.0, 2600.0), (30.0, 2700.0), (50.0, 2700.0), (75.0, 2700.0), (110.0, 2700.0)] {

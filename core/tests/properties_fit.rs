@@ -1,5 +1,5 @@
-//! What must hold of the fit for any valid job: no panic, every figure finite, no jump but where a limit or a stop is
-//! met.
+//! What must hold of the fit for any valid job: no panic, every figure finite, no jump but where a limit or a
+//! stop is met.
 
 use crate::any_job::{cases, jobs};
 use proptest::prelude::*;
@@ -91,8 +91,9 @@ prop_compose! {
     }
 }
 
-/// Steps of a curve that stand out from the two before and the two after; a bend, as where a limit is met, does not.
-/// Where the curve has a gap, as at speeds where the engine cannot turn the propeller, each side counts by itself.
+/// Steps of a curve that stand out from the two before and the two after; a bend, as where a limit is met,
+/// does not. Where the curve has a gap, as at speeds where the engine cannot turn the propeller, each side
+/// counts by itself.
 fn jumps(name: &str, curve: &[Option<f64>]) -> Vec<String> {
     let most = curve.iter().flatten().fold(0.0_f64, |m, v| m.max(v.abs()));
     curve.split(Option::is_none).flat_map(|part| jumps_of_part(name, part, most)).collect()

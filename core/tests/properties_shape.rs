@@ -1,4 +1,5 @@
-//! What must hold of shaping for any valid job: an answer in finite figures within its limits, or a refusal in words.
+//! What must hold of shaping for any valid job: an answer in finite figures within its limits, or a refusal
+//! in words.
 
 use std::ops::ControlFlow;
 

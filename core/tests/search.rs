@@ -1,4 +1,5 @@
-//! The search for the best blade: it does not depend on where it starts, keeps its limits, and says what is in the way.
+//! The search for the best blade: it does not depend on where it starts, keeps its limits, and says what is
+//! in the way.
 
 use std::ops::ControlFlow;
 
@@ -23,7 +24,8 @@ fn aim(flight_point: &str, figure: Figure) -> Aim {
 const STARTS: [[f64; FREE]; 3] =
     [[0.0; FREE], [0.5, -0.4, 0.3, -0.3, 0.2, 0.4, -0.4, 0.3], [-0.5, 0.4, -0.3, 0.4, -0.4, -0.5, 0.5, -0.4]];
 
-/// The gain is a mean of logarithms of ratios, so that the results of two searches differ by the ratio of theirs.
+/// The gain is a mean of logarithms of ratios, so that the results of two searches differ by the ratio of
+/// theirs.
 #[test]
 fn three_starts_come_to_the_same_result_within_three_parts_in_a_thousand() {
     for (d, demo_job) in DEMOS.iter().enumerate() {
@@ -86,7 +88,8 @@ fn limits_are_kept_and_cost_something() {
     assert!(cruise <= 2500.1, "{cruise}");
 }
 
-/// A margin above that of the drawn blade is reached by another blade; without wood in the job nothing is judged.
+/// A margin above that of the drawn blade is reached by another blade; without wood in the job nothing is
+/// judged.
 #[test]
 fn a_stress_margin_is_kept_where_the_job_names_its_wood() {
     let mut job = demo(0).job;
@@ -193,7 +196,8 @@ fn wishes_of_the_job_file_are_those_of_the_search() {
     );
 }
 
-/// The demo's power curve begins at 2000 rpm and its engine's limit is 3300: no blade turns slower or faster at full throttle.
+/// The demo's power curve begins at 2000 rpm and its engine's limit is 3300: no blade turns slower or faster
+/// at full throttle.
 #[test]
 fn limits_that_no_blade_can_keep_are_told_before_one_is_tried() {
     let rig = demo(0);

@@ -50,7 +50,8 @@ fn every_station_of_a_twisted_blade_works_at_its_best_angle() {
     assert!(answers >= 9, "only {answers} flight points have a twist");
 }
 
-/// A geared engine turns a big propeller slowly: the flow is steep, and Prandtl's factor is small well inboard of the tip.
+/// A geared engine turns a big propeller slowly: the flow is steep, and Prandtl's factor is small well
+/// inboard of the tip.
 #[test]
 fn a_slow_propellers_outer_stations_work_at_their_best_angle_too() {
     let mut job = demo(0).job;
@@ -179,7 +180,8 @@ fn the_least_loss_blade_beats_the_drawn_one_at_its_own_point() {
     }
 }
 
-/// Chords that can be carved: no jump between neighbours, and a tip that narrows, at little cost in efficiency.
+/// Chords that can be carved: no jump between neighbours, and a tip that narrows, at little cost in
+/// efficiency.
 #[test]
 fn the_chords_of_a_least_loss_blade_run_smoothly_at_low_reynolds_numbers() {
     for (d, p) in [(1, 1), (1, 2), (2, 2)] {
@@ -201,8 +203,9 @@ fn the_chords_of_a_least_loss_blade_run_smoothly_at_low_reynolds_numbers() {
     }
 }
 
-/// Adkins and Liebeck's equations are those of the blade elements but for hub loss and the inflow angle in Prandtl's factor: without hub loss
-/// 0.2 % in thrust and power (own analysis). That takes stations close together and out to the tip, where the chord ends in nothing.
+/// Adkins and Liebeck's equations are those of the blade elements but for hub loss and the inflow angle in
+/// Prandtl's factor: without hub loss 0.2 % in thrust and power (own analysis). That takes stations close
+/// together and out to the tip, where the chord ends in nothing.
 #[test]
 fn a_least_loss_blade_analysed_anew_returns_its_design() {
     let mut job = demo(0).job;
@@ -226,8 +229,8 @@ fn a_least_loss_blade_analysed_anew_returns_its_design() {
     assert!((r.analysed_power_w / r.power_w - 1.0).abs() < 0.005, "{} {}", r.analysed_power_w, r.power_w);
 }
 
-/// At the design's own rpm and power (the blades turned to hold both), no chord or angle of a station changed by 2 % gains more than 0.05 %
-/// efficiency.
+/// At the design's own rpm and power (the blades turned to hold both), no chord or angle of a station changed
+/// by 2 % gains more than 0.05 % efficiency.
 #[test]
 fn no_small_change_of_a_least_loss_blade_gains_anything_worth_having() {
     let mut job = demo(0).job;
@@ -317,7 +320,8 @@ fn the_chart_holds_the_drawn_propeller_and_its_limits() {
     }
 }
 
-/// Cells are led from one to the next; each must be what its blade gives by itself, also where the limit rpm comes in or no speed is met.
+/// Cells are led from one to the next; each must be what its blade gives by itself, also where the limit rpm
+/// comes in or no speed is met.
 #[test]
 fn top_speed_over_pitch_and_diameter_is_that_of_each_blade_alone() {
     let (mut held, mut stepped_over) = ([0, 0], 0);
@@ -347,7 +351,8 @@ fn top_speed_over_pitch_and_diameter_is_that_of_each_blade_alone() {
                 && same(led.airspeed_m_s, alone.airspeed_m_s)
                 && same(led.rpm, alone.rpm)
                 && same(led.power_w, alone.power_w);
-            // Where the engine turns the blade only next to its top speed, the look over all speeds may step over it.
+            // Where the engine turns the blade only next to its top speed, the look over all speeds may step
+            // over it.
             if alone.state == State::EngineCannotTurnIt && led.airspeed_m_s.is_some() {
                 stepped_over += 1;
                 continue;

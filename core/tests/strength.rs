@@ -246,8 +246,9 @@ fn a_stacking_line_that_leans_is_the_rake() {
     assert!(b.root_forward_n_m < 0.9 * upright.root_forward_n_m);
 }
 
-/// A blade of one section all along, stacked by a point a fifth of the chord farther back: all of it stands farther ahead in the turning by `Δu = c/5 cos β`,
-/// and the centrifugal force of the mass μ per metre bends it there by `Ω² μ Δu (R − r)²/2` in the plane of rotation (closed form), not at all out of it.
+/// A blade of one section all along, stacked by a point a fifth of the chord farther back: all of it stands
+/// farther ahead in the turning by `Δu = c/5 cos β`, and the centrifugal force of the mass μ per metre bends
+/// it there by `Ω² μ Δu (R − r)²/2` in the plane of rotation (closed form), not at all out of it.
 #[test]
 fn an_even_blade_stacked_farther_back_is_bent_by_its_own_pull() {
     let stacked = |fraction: f64| {

@@ -1,4 +1,5 @@
-//! Two of everything on an aircraft of twice the size: what each propeller does stays the same, what they do together doubles.
+//! Two of everything on an aircraft of twice the size: what each propeller does stays the same, what they do
+//! together doubles.
 
 use serde_json::Value;
 use spokeshave::fit::{envelope, take_off};

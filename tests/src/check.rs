@@ -125,7 +125,8 @@ impl Check {
 #[must_use]
 pub fn worst(what: &str, checks: Vec<Check>) -> Check {
     let of = checks.len();
-    // The first one that misses, else the first of those that are alike to three places: the same on every machine.
+    // The first one that misses, else the first of those that are alike to three places: the same on every
+    // machine.
     let rank = |c: &Check| (u8::from(!c.holds()), (1e3 * c.strain()).round());
     let above = |a: Check, b: Check| if rank(&b) > rank(&a) { b } else { a };
     let worst = checks.into_iter().reduce(above).expect("checks");

@@ -1,6 +1,7 @@
 //! Formulas as the reference cases write them: `0.875*(0.10+0.32x-0.36x^2), x=r/0.875`.
 //!
-//! Numbers, names, `+ - * / ^`, brackets, `atan tan sin cos sqrt exp`, a product without a sign, and after commas what further names stand for.
+//! Numbers, names, `+ - * / ^`, brackets, `atan tan sin cos sqrt exp`, a product without a sign, and after
+//! commas what further names stand for.
 
 /// A formula with what its names stand for.
 #[derive(Clone, Debug)]

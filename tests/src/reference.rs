@@ -52,8 +52,9 @@ pub fn section(polar: &Value) -> Value {
     json!({"name": "reference", "polars": polars})
 }
 
-/// A job with the blade, polar, speed and rpm of a case of kind `bem.analysis`, with everything switched off that the cases do without.
-/// The stations are those of the blade's table; `extra` radii (m) are added by linear interpolation.
+/// A job with the blade, polar, speed and rpm of a case of kind `bem.analysis`, with everything switched off
+/// that the cases do without. The stations are those of the blade's table; `extra` radii (m) are added by
+/// linear interpolation.
 ///
 /// # Panics
 /// When the job made is refused.

@@ -1,9 +1,9 @@
 //! A propeller measured in a wind tunnel, as a job, with its measurements.
 //!
-//! J. B. Brandt, R. W. Deters, G. K. Ananda, M. S. Selig, *UIUC Propeller Database*, vol. 2, 2015; R. W. Deters, G. K. Ananda,
-//! M. S. Selig, *Reynolds Number Effects on the Performance of Small-Scale Propellers*, AIAA 2014-2151: a 9.0 inch
-//! printed model of the blade form 5868-9 of NACA Report 640, Clark Y sections, 2 blades, 15° at 0.75 R by design. The
-//! print measured by its authors from photographs has 16.36° there.
+//! J. B. Brandt, R. W. Deters, G. K. Ananda, M. S. Selig, *UIUC Propeller Database*, vol. 2, 2015; R. W.
+//! Deters, G. K. Ananda, M. S. Selig, *Reynolds Number Effects on the Performance of Small-Scale Propellers*,
+//! AIAA 2014-2151: a 9.0 inch printed model of the blade form 5868-9 of NACA Report 640, Clark Y sections, 2
+//! blades, 15° at 0.75 R by design. The print measured by its authors from photographs has 16.36° there.
 
 use serde_json::{Value, json};
 use spokeshave::job::Job;
@@ -48,8 +48,9 @@ pub const PRINT_TURN_DEG: f64 = 1.36;
 
 const DIAMETER_M: f64 = 0.2286;
 
-/// The propeller turned by some degrees from its design, one flight point for each measured J at 6 036 rpm and one at rest.
-/// The hub is not published: 0.15 R is usual. The chord inboard of 0.30 R is not published either and is held.
+/// The propeller turned by some degrees from its design, one flight point for each measured J at 6 036 rpm
+/// and one at rest. The hub is not published: 0.15 R is usual. The chord inboard of 0.30 R is not published
+/// either and is held.
 ///
 /// # Panics
 /// When the job made is refused.

@@ -115,7 +115,8 @@ impl WoodCase {
         line.expect("rising radii").at(radius_m)
     }
 
-    /// A job with this blade, a section without an outline, a material of the case's density and one flight point at its rpm.
+    /// A job with this blade, a section without an outline, a material of the case's density and one flight
+    /// point at its rpm.
     ///
     /// # Panics
     /// When the job made is refused.

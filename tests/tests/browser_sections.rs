@@ -1,4 +1,5 @@
-//! Polars are made in the page from a pasted outline, and measured tables are brought in, without harm to the job.
+//! Polars are made in the page from a pasted outline, and measured tables are brought in, without harm to the
+//! job.
 
 use anyhow::{Context, Result};
 use serde_json::Value;
@@ -9,7 +10,8 @@ const LONGEST_POLAR_S: f64 = 4.0;
 /// What a person still takes for at once, on a machine that does other things as well.
 const LONGEST_TURN_MS: f64 = 200.0;
 
-/// A flat-faced section drawn by arcs: back y = 4 t x (1 − x), a nose circle, a flat face; not any real section.
+/// A flat-faced section drawn by arcs: back y = 4 t x (1 − x), a nose circle, a flat face; not any real
+/// section.
 fn outline() -> String {
     let (thickness, nose) = (0.12, 0.012_f64);
     let back = |x: f64| 4.0 * thickness * x * (1.0 - x) + 2.0 * nose * (1.0 - x);

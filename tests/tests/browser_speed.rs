@@ -1,5 +1,5 @@
-//! How soon an edit is seen, told and not judged: a time depends on the machine. A program of its own, so that no other
-//! check takes the time.
+//! How soon an edit is seen, told and not judged: a time depends on the machine. A program of its own, so
+//! that no other check takes the time.
 
 use anyhow::{Context, Result};
 use spokeshave_tests::browser::drive;
@@ -13,7 +13,8 @@ const AT_ONCE_MS: f64 = 100.0;
 const EDITS: usize = 15;
 
 /// Turns a station by a little, as typing does, and times what follows: until the departure in the
-/// table has changed, until the last thing on the screen has, and the last on the page, panels further down included.
+/// table has changed, until the last thing on the screen has, and the last on the page, panels further down
+/// included.
 const EDIT: &str = r#"
     const done = arguments[0];
     const box = document.querySelector('[aria-label="Blade angle at station 6, degrees"]');

@@ -34,7 +34,8 @@ pub fn at_start() -> Option<String> {
     job_at_start()
 }
 
-/// Whether the last that was kept in this browser is not whole, so that [`at_start`] gives what was kept before it, if anything.
+/// Whether the last that was kept in this browser is not whole, so that [`at_start`] gives what was kept
+/// before it, if anything.
 #[must_use]
 pub fn torn() -> bool {
     kept_in_part()
@@ -74,7 +75,8 @@ pub fn after_work() {
     keep_after();
 }
 
-/// Puts a job that cannot be read aside under a key of its own, so that what is kept next does not overwrite it.
+/// Puts a job that cannot be read aside under a key of its own, so that what is kept next does not overwrite
+/// it.
 pub fn set_aside() {
     put_aside();
 }

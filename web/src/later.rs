@@ -1,5 +1,5 @@
-//! Work that follows an edit in later frames, a piece at a time so that the page stays at hand: the other flight points
-//! first, then, unless something is being dragged, the curves and the map.
+//! Work that follows an edit in later frames, a piece at a time so that the page stays at hand: the other
+//! flight points first, then, unless something is being dragged, the curves and the map.
 
 use std::cell::RefCell;
 use std::rc::Rc;

@@ -1,7 +1,7 @@
 //! The Spokeshave page: a Yew app that runs entirely in the browser.
 //!
-//! One direction: [`state`] (pure: actions to state) → [`results`] (what the core computes, kept by what it depends on) →
-//! views. The browser is touched at the edges only: [`keep`], [`saved_page`], `effect`.
+//! One direction: [`state`] (pure: actions to state) → [`results`] (what the core computes, kept by what it
+//! depends on) → views. The browser is touched at the edges only: [`keep`], [`saved_page`], `effect`.
 
 pub mod app;
 pub mod background;

@@ -26,7 +26,8 @@ pub fn plain(value: f64, decimals: usize) -> String {
 pub fn figure(units: Units, quantity: Quantity, si: Option<f64>) -> String {
     let Some(shown) = si.map(|si| units.shown(quantity, si)) else { return NO_FIGURE.into() };
     match quantity {
-        // From grams to tonnes, and figures as they are given: no more decimals than they have, small masses in three figures.
+        // From grams to tonnes, and figures as they are given: no more decimals than they have, small masses
+        // in three figures.
         Quantity::Mass | Quantity::Area | Quantity::Charge => {
             let small = quantity == Quantity::Mass && shown.abs() < 1.0 && shown != 0.0;
             let text = if small { significant(shown, 3) } else { fixed(shown, 2) };
@@ -51,8 +52,8 @@ pub fn with_unit(units: Units, quantity: Quantity, si: Option<f64>) -> String {
     }
 }
 
-/// Reads what a person typed: decimal point or comma, a true minus, thousands apart by spaces, whole and broken inches
-/// (`3 1/4`), and a unit of the quantity behind it. Gives SI.
+/// Reads what a person typed: decimal point or comma, a true minus, thousands apart by spaces, whole and
+/// broken inches (`3 1/4`), and a unit of the quantity behind it. Gives SI.
 ///
 /// # Errors
 /// What is wrong with it, in a few words.

@@ -1,5 +1,5 @@
-//! What is computed for the page, kept by the part of the job it depends on, so that an edit works out again only what it
-//! changed. The title, the wood and other flight points do not touch a point's results.
+//! What is computed for the page, kept by the part of the job it depends on, so that an edit works out again
+//! only what it changed. The title, the wood and other flight points do not touch a point's results.
 
 use std::rc::Rc;
 
@@ -109,7 +109,8 @@ pub struct Results {
 }
 
 impl Results {
-    /// Makes ready for a job; drops what the job no longer agrees with. Jobs that cannot be built leave nothing.
+    /// Makes ready for a job; drops what the job no longer agrees with. Jobs that cannot be built leave
+    /// nothing.
     pub fn of(&mut self, job: &Job) -> &mut Self {
         match &self.rig {
             Some(rig) if rig.job == *job => {}

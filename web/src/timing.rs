@@ -12,9 +12,10 @@ use spokeshave::section::solver::{Settings, sweep};
 use spokeshave::shape::{Wish, search};
 use wasm_bindgen::prelude::wasm_bindgen;
 
-/// Does a piece of work on the first example's cruise so many times: `analysis` (30 elements), `map` (60 speeds × 40 radii), `range`
-/// (the speed range at 60 speeds, departures at every station), `search` (for the usual aims) or `polar` (30 points of Clark Y at one Reynolds number, 60,000).
-/// Gives back how often it did it: 0 for other words.
+/// Does a piece of work on the first example's cruise so many times: `analysis` (30 elements), `map` (60
+/// speeds × 40 radii), `range` (the speed range at 60 speeds, departures at every station), `search` (for the
+/// usual aims) or `polar` (30 points of Clark Y at one Reynolds number, 60,000). Gives back how often it did
+/// it: 0 for other words.
 #[must_use]
 #[wasm_bindgen]
 pub fn work(what: &str, times: u32) -> u32 {

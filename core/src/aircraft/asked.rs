@@ -31,8 +31,8 @@ impl Asked {
     }
 }
 
-/// Drag and power at `count` speeds from the stall (three quarters of the speed of least power where no greatest lift
-/// coefficient is given) to 2.2 times the speed of least drag.
+/// Drag and power at `count` speeds from the stall (three quarters of the speed of least power where no
+/// greatest lift coefficient is given) to 2.2 times the speed of least drag.
 #[must_use]
 pub fn asked(a: &Aeroplane, air: &Air, count: u32) -> Vec<Asked> {
     let speeds = speeds(a, air);
@@ -50,7 +50,8 @@ mod tests {
     use super::*;
     use crate::job::{Aircraft, DEMOS, Job};
 
-    /// Closed form for a parabolic polar: least drag is `2 W sqrt(k cd0)` (any aerodynamics text; common practice).
+    /// Closed form for a parabolic polar: least drag is `2 W sqrt(k cd0)` (any aerodynamics text; common
+    /// practice).
     #[test]
     fn the_curve_runs_from_the_stall_and_its_least_drag_is_the_closed_form() {
         let job = Job::from_json(DEMOS[0].json).unwrap();

@@ -71,15 +71,16 @@ pub struct Blank {
 /// Steepest face line that is marked on the sides of the blank: its rise over its run.
 const STEEPEST: f64 = 50.0;
 
-/// Where a station lies while the rear of the blank lies on the bench. Pairs are of the leading and of the trailing edge's side.
+/// Where a station lies while the rear of the blank lies on the bench. Pairs are of the leading and of the
+/// trailing edge's side.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Heights {
     /// Radius, m.
     pub radius_m: f64,
     /// The sawn sides of the blade from the middle line of the blank, m.
     pub outline_m: [f64; 2],
-    /// The face line where it comes out at these sides, above the bench, m; none where the section stands upright. Below 0 or above the blank's thickness
-    /// it comes out at the rear or the front instead.
+    /// The face line where it comes out at these sides, above the bench, m; none where the section stands
+    /// upright. Below 0 or above the blank's thickness it comes out at the rear or the front instead.
     pub face_m: Option<[f64; 2]>,
     /// The edges themselves above the bench, m.
     pub edges_m: [f64; 2],
@@ -160,7 +161,8 @@ impl Blank {
         })
     }
 
-    /// Where a section lies while the rear of the blank lies on the bench; `sawn_m`: the sides of the blade in plan there, against and along the turning, m.
+    /// Where a section lies while the rear of the blank lies on the bench; `sawn_m`: the sides of the blade
+    /// in plan there, against and along the turning, m.
     #[must_use]
     pub fn heights(&self, ring: &Ring, sawn_m: [f64; 2]) -> Heights {
         let up = |z: f64| z - self.back_m;
@@ -237,7 +239,8 @@ fn lamination_count(job: &Job, thickness_m: f64) -> u32 {
     asked.unwrap_or((thickness_m / THICKEST_LAMINATION_M).ceil().max(1.0) as u32)
 }
 
-/// Length of a blank with its laminations turned by at most `turn`: two blades lie in one piece, others each in its own.
+/// Length of a blank with its laminations turned by at most `turn`: two blades lie in one piece, others each
+/// in its own.
 fn board_length_m(form: &Form, turn: f64, allowance_m: f64) -> f64 {
     let (tip, hub) = (form.blade.radius_m, form.blade.hub_radius_m);
     let whole = match (form.one_piece, form.blade.count) {
@@ -268,8 +271,8 @@ fn layers(form: &Form, rings: &[Ring], sizes: Sizes, count: u32, step_rad: f64) 
     Layers { planks, step_rad, board_length_m, boards: count * pieces, volume_m3: cut * f64::from(pieces) }
 }
 
-/// How far a section reaches within a slab from the middle line of a board turned by `turn_rad`; `None` where it has no
-/// wood there.
+/// How far a section reaches within a slab from the middle line of a board turned by `turn_rad`; `None` where
+/// it has no wood there.
 fn reach_in(ring: &Ring, slab: [f64; 2], turn_rad: f64) -> Option<f64> {
     let (sin, cos) = turn_rad.sin_cos();
     let across = |y: f64| (y * cos - ring.radius_m * sin).abs();

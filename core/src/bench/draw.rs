@@ -1,5 +1,5 @@
-//! A plain drawing: lines, circles and text on named layers, in millimetres, `y` upward. One module per file format writes
-//! it; nothing in here knows of paper or files.
+//! A plain drawing: lines, circles and text on named layers, in millimetres, `y` upward. One module per file
+//! format writes it; nothing in here knows of paper or files.
 
 mod text;
 

@@ -9,8 +9,8 @@ use super::shape::Shape;
 
 /// Points on each side of a section, from edge to edge.
 pub const SIDE_POINTS: usize = 64;
-/// Thickest trailing edge that is drawn, in chords: where the tip is rounded, and everywhere if the job names none, the least thickness
-/// gives way to it.
+/// Thickest trailing edge that is drawn, in chords: where the tip is rounded, and everywhere if the job names
+/// none, the least thickness gives way to it.
 const THICKEST_EDGE: f64 = 0.05;
 /// Stations closer to the tip than this share of the radius take part in its rounding.
 const AT_TIP: f64 = 0.995;
@@ -36,7 +36,8 @@ impl Form {
     /// The form of a job's blade.
     ///
     /// # Errors
-    /// A section that cannot be drawn, a station inside the hub, or one too narrow for the trailing edge that the job names.
+    /// A section that cannot be drawn, a station inside the hub, or one too narrow for the trailing edge that
+    /// the job names.
     pub fn new(job: &Job, blade: &Blade) -> Result<Self, BenchError> {
         let making = job.bench.clone().unwrap_or_default();
         let mut faults = Vec::new();
@@ -87,7 +88,8 @@ impl Form {
         self.making.trailing_edge_m.unwrap_or(0.002 * self.blade.radius_m)
     }
 
-    /// Whether some station is so narrow that its trailing edge is thinner than that: only where the job names none.
+    /// Whether some station is so narrow that its trailing edge is thinner than that: only where the job
+    /// names none.
     #[must_use]
     pub fn edge_gives_way(&self) -> bool {
         let drawn = self.station_radii_m().filter(|r| *r < AT_TIP * self.blade.radius_m);
@@ -152,7 +154,8 @@ impl Form {
     }
 }
 
-/// The fault of a trailing edge (m) that a section, with its number, radius and chord (m), has not by itself and cannot be given.
+/// The fault of a trailing edge (m) that a section, with its number, radius and chord (m), has not by itself
+/// and cannot be given.
 fn edge_too_thick(
     wanted_m: f64,
     shape: &Shape,

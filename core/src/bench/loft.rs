@@ -1,8 +1,8 @@
 //! The rings of the surface from the axis, or the hub's edge, to the tip.
 //!
-//! A propeller of one piece has a boss: a round block as thick as the hub. Its rings are rectangles as wide as the circle
-//! at that distance from the axis; between the boss and the first station they are led over, point by point, into the
-//! section there. Blades of their own begin at the hub's edge.
+//! A propeller of one piece has a boss: a round block as thick as the hub. Its rings are rectangles as wide
+//! as the circle at that distance from the axis; between the boss and the first station they are led over,
+//! point by point, into the section there. Blades of their own begin at the hub's edge.
 
 use super::form::{Form, SIDE_POINTS};
 use super::ring::Ring;
@@ -17,8 +17,8 @@ const TIP_RINGS: u32 = 12;
 const PLAIN_BOSS: f64 = 0.8;
 /// Softness of the corner between boss and blade in plan, in hub radii.
 const FAIRING: f64 = 0.5;
-/// A blade of one piece stands free of the boss from this share of the hub's radius on, if its first station is not
-/// farther out.
+/// A blade of one piece stands free of the boss from this share of the hub's radius on, if its first station
+/// is not farther out.
 const FREE_OF_BOSS: f64 = 1.25;
 
 /// Block in the middle of a propeller of one piece.
@@ -122,8 +122,9 @@ fn rim(boss: Boss) -> (f64, f64) {
     (up, per_side - 2.0 * up)
 }
 
-/// A rectangle with as many points as a section, corners among them, the same seen from both sides: point 0 in the middle
-/// of the side behind, the middle point in the middle of the side ahead; all moved on by `turn` points round the rim.
+/// A rectangle with as many points as a section, corners among them, the same seen from both sides: point 0
+/// in the middle of the side behind, the middle point in the middle of the side ahead; all moved on by `turn`
+/// points round the rim.
 fn block(boss: Boss, half_m: f64, turn: f64) -> Vec<[f64; 2]> {
     let [low, high] = boss.faces_m;
     let (middle, half_high) = (0.5 * (low + high), 0.5 * (high - low));
@@ -145,8 +146,8 @@ fn block(boss: Boss, half_m: f64, turn: f64) -> Vec<[f64; 2]> {
     (0..2 * SIDE_POINTS).map(point).collect()
 }
 
-/// By how many points the leading edge of the root lies round the rim from the middle of the block's side, so that the
-/// surface does not shrink on its way between the two.
+/// By how many points the leading edge of the root lies round the rim from the middle of the block's side, so
+/// that the surface does not shrink on its way between the two.
 fn towards_edge(boss: Boss, root: &Ring) -> f64 {
     let [low, high] = boss.faces_m;
     let [y, z] = root.leading_edge();

@@ -67,7 +67,8 @@ impl Paper {
 /// A drawing seen through a window.
 #[derive(Clone, Debug, PartialEq)]
 pub struct View {
-    /// The drawing, in the sheet's millimetres from its lower left corner; only what lies within the window shows.
+    /// The drawing, in the sheet's millimetres from its lower left corner; only what lies within the window
+    /// shows.
     pub drawing: Drawing,
     /// The window: lower left and upper right corner, mm.
     pub window_mm: [[f64; 2]; 2],
@@ -95,8 +96,8 @@ pub struct Leaf {
     pub drawing: Drawing,
 }
 
-/// Lays leaves on paper, one after the other, each over as many sheets as it needs; every sheet says `title`, its name and its
-/// number, at its foot the cautions, and above them what must be warned of.
+/// Lays leaves on paper, one after the other, each over as many sheets as it needs; every sheet says `title`,
+/// its name and its number, at its foot the cautions, and above them what must be warned of.
 #[must_use]
 pub fn lay(
     title: &str,
@@ -120,8 +121,8 @@ pub fn lay(
     sheets
 }
 
-/// Binds pages that are read and not measured: each leaf is one page, its drawing's origin in the upper left corner of the room; no
-/// ruler.
+/// Binds pages that are read and not measured: each leaf is one page, its drawing's origin in the upper left
+/// corner of the room; no ruler.
 #[must_use]
 pub fn bind(title: &str, pages: Vec<Leaf>, paper: Paper, cautions: &Cautions) -> Vec<Sheet> {
     let of = pages.len();
@@ -147,7 +148,8 @@ struct Cut {
 }
 
 impl Cut {
-    /// Lower left and upper right corner, in the leaf's millimetres, of what a part shows less half of what it shares with its neighbours.
+    /// Lower left and upper right corner, in the leaf's millimetres, of what a part shows less half of what
+    /// it shares with its neighbours.
     fn own(&self, place: [u32; 2]) -> [[f64; 2]; 2] {
         let step = [0, 1].map(|a| self.part[a] - OVERLAP_MM);
         let left = self.low[0] + f64::from(place[0]) * step[0];
@@ -173,7 +175,8 @@ fn cut(leaf: &Leaf, room: [f64; 2]) -> Option<Cut> {
     Some(Cut { low, high, part: [0, 1].map(|a| size[a].min(room[a])), count })
 }
 
-/// Sheets that show a leaf, in rows from the top, less those on which only a guide line would stand; narrow parts of a long one stand side by side.
+/// Sheets that show a leaf, in rows from the top, less those on which only a guide line would stand; narrow
+/// parts of a long one stand side by side.
 fn laid(leaf: &Leaf, paper: Paper) -> Vec<Sheet> {
     let (room, at) = (paper.room_mm(), paper.room_at_mm());
     let Some(cut) = cut(leaf, room) else { return Vec::new() };
@@ -225,7 +228,8 @@ fn sheet(
     Sheet { name, size_mm, frame, views }
 }
 
-/// Joining lines in the middle of what two sheets share, with crosses: cut one sheet on the line, lay it on the other's.
+/// Joining lines in the middle of what two sheets share, with crosses: cut one sheet on the line, lay it on
+/// the other's.
 fn joins(frame: &mut Drawing, window: [[f64; 2]; 2], place: [u32; 2], count: [u32; 2]) {
     let half = 0.5 * OVERLAP_MM;
     let [low, high] = window;

@@ -1,7 +1,8 @@
 //! Holes through the boss of a solid.
 //!
-//! The boss has two flat faces. Of each the triangles are taken out; what is left open is filled again round the holes: a strip from the rim to a circle,
-//! and the plate within the circle by ear clipping; the walls of the holes join both faces.
+//! The boss has two flat faces. Of each the triangles are taken out; what is left open is filled again round
+//! the holes: a strip from the rim to a circle, and the plate within the circle by ear clipping; the walls of
+//! the holes join both faces.
 
 use std::collections::HashMap;
 use std::f64::consts::{PI, TAU};
@@ -43,7 +44,8 @@ impl Face {
 }
 
 impl Solid {
-    /// The solid with holes along the axis through the boss of so many blades; `None` where its faces do not lie flat and whole round the holes.
+    /// The solid with holes along the axis through the boss of so many blades; `None` where its faces do not
+    /// lie flat and whole round the holes.
     #[must_use]
     pub fn pierced(&self, holes: &[Hole], boss: Boss, blades: u32) -> Option<Self> {
         if holes.is_empty() {
@@ -88,7 +90,8 @@ impl Solid {
         x.hypot(y)
     }
 
-    /// Takes a face's triangles out and gives its rim, anticlockwise seen from ahead; `None` unless the rim is one loop round the axis.
+    /// Takes a face's triangles out and gives its rim, anticlockwise seen from ahead; `None` unless the rim
+    /// is one loop round the axis.
     fn lift(&mut self, face: Face) -> Option<Vec<u32>> {
         let on = |i: &u32| face.has(self.vertices[*i as usize]);
         let (flat, rest): (Vec<[u32; 3]>, Vec<[u32; 3]>) =

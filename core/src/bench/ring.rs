@@ -3,8 +3,8 @@
 use crate::section::outline::Place;
 use crate::section::outline::crossings;
 
-/// A section in its plane. Points run from the middle of the trailing edge over the cambered side round the leading edge
-/// and back along the face: point 0 the trailing edge, the middle one the leading edge.
+/// A section in its plane. Points run from the middle of the trailing edge over the cambered side round the
+/// leading edge and back along the face: point 0 the trailing edge, the middle one the leading edge.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Ring {
     /// Radius of the plane, m.
@@ -40,8 +40,9 @@ impl Ring {
         side
     }
 
-    /// The face line: the straight line under the face that touches the section on both sides of the middle of its chord, and under which it has no wood; on
-    /// a flat face it lies, a hollow one it bridges, a round one it touches. Two points of the outline, the one nearer the trailing edge first, m.
+    /// The face line: the straight line under the face that touches the section on both sides of the middle
+    /// of its chord, and under which it has no wood; on a flat face it lies, a hollow one it bridges, a
+    /// round one it touches. Two points of the outline, the one nearer the trailing edge first, m.
     #[must_use]
     pub fn face_line(&self) -> [[f64; 2]; 2] {
         let (lead, trail) = (self.leading_edge(), self.trailing_edge());
@@ -134,7 +135,8 @@ mod tests {
 
     #[test]
     fn the_face_line_bridges_a_hollow_face() {
-        // From the trailing edge over the back round the leading edge and along a face that is hollow in the middle, feet at 0.2 and 0.7.
+        // From the trailing edge over the back round the leading edge and along a face that is hollow in the
+        // middle, feet at 0.2 and 0.7.
         let points =
             vec![[0.0, 0.0], [0.3, 0.2], [0.7, 0.2], [1.0, 0.0], [0.7, -0.06], [0.5, 0.02], [0.2, -0.05]];
         let ring = Ring { radius_m: 0.3, points };

@@ -2,7 +2,8 @@
 
 use crate::section::outline::{Outline, thicken};
 
-/// Points of a section of chord 1 from the upper trailing edge round the nose to the lower one, as many on each side.
+/// Points of a section of chord 1 from the upper trailing edge round the nose to the lower one, as many on
+/// each side.
 #[derive(Clone, Debug, PartialEq)]
 pub(super) struct Shape {
     pub(super) points: Vec<[f64; 2]>,

@@ -32,13 +32,15 @@ impl Solid {
         solid
     }
 
-    /// A whole propeller of one piece that turns clockwise seen from behind: `rings` of one blade from the axis out, the boss among them.
+    /// A whole propeller of one piece that turns clockwise seen from behind: `rings` of one blade from the
+    /// axis out, the boss among them.
     #[must_use]
     pub fn propeller(rings: &[Ring], tip_m: f64, blades: u32, boss_radius_m: f64) -> Self {
         let mut solid = Self::default();
         let Some(first) = rings.first() else { return solid };
         let n = first.points.len();
-        // The ring at the axis lies half in the plane shared with the next blade, half in that with the one before.
+        // The ring at the axis lies half in the plane shared with the next blade, half in that with the one
+        // before.
         let bend = |j: u32| move |p: [f64; 3]| bent(p, f64::from(blades), boss_radius_m, f64::from(j));
         let seams: Vec<Vec<u32>> = (0..blades).map(|j| solid.ring(first, bend(j))).collect();
         let ends = [n / 4, 3 * n / 4].map(|k| seams[0][k]);
@@ -124,7 +126,8 @@ impl Solid {
     }
 }
 
-/// A point of blade `j`: near the hub its half plane is bent into the blade's share of the turn, then turned into place.
+/// A point of blade `j`: near the hub its half plane is bent into the blade's share of the turn, then turned
+/// into place.
 fn bent([x, y, z]: [f64; 3], blades: f64, boss_radius_m: f64, j: f64) -> [f64; 3] {
     let (far, angle) = (x.hypot(y), y.atan2(x));
     let past = ((far / boss_radius_m - 1.0) / (BENT_TO - 1.0)).clamp(0.0, 1.0);

@@ -31,8 +31,8 @@ impl Bench {
     }
 }
 
-/// Faces of a solid that look at the eye, the far ones first. The first blade lies to the right; `turn_rad` turns the
-/// propeller about its axis, `tilt_rad` about the line of that blade: at 0 it is seen from ahead.
+/// Faces of a solid that look at the eye, the far ones first. The first blade lies to the right; `turn_rad`
+/// turns the propeller about its axis, `tilt_rad` about the line of that blade: at 0 it is seen from ahead.
 #[must_use]
 pub fn turned(solid: &Solid, turn_rad: f64, tilt_rad: f64) -> Vec<Face> {
     let ((st, ct), (sl, cl)) = (turn_rad.sin_cos(), tilt_rad.sin_cos());

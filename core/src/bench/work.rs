@@ -19,7 +19,8 @@ use crate::drilling::Pattern;
 
 /// How far (m) a section may pass the faces of the boss where it enters it.
 const BOSS_SLACK_M: f64 = 2e-4;
-/// Neighbouring rings turned by more are looked at in between as well: there the surface may cross itself where neither of them does.
+/// Neighbouring rings turned by more are looked at in between as well: there the surface may cross itself
+/// where neither of them does.
 const TWISTED_RAD: f64 = 0.35;
 
 /// A station as it is carved.
@@ -92,7 +93,8 @@ impl Bench {
                     chord_m,
                     thickness_m: cut.thickness_ratio * chord_m,
                     angle_rad: cut.angle_rad,
-                    // As drawn: the angle that is tabled for its section ends with the thickest of the tables.
+                    // As drawn: the angle that is tabled for its section ends with the thickest of the
+                    // tables.
                     face_rad: blade.face_to_chord_rad(radius_m).map(|_| ring.face_rad()),
                     heights: blank.heights(&ring, sawn_m(&rings, &ring)),
                     ring,
@@ -111,7 +113,8 @@ impl Bench {
         })
     }
 
-    /// What must be said of the blade's strength on every sheet that it is made from; worked out once, when it is first asked for.
+    /// What must be said of the blade's strength on every sheet that it is made from; worked out once, when
+    /// it is first asked for.
     #[must_use]
     pub fn warning(&self) -> Option<String> {
         let judged = self.verdict.get_or_init(|| {
@@ -124,7 +127,8 @@ impl Bench {
         }
     }
 
-    /// The same with the flight point for whose departure wood is taken off the carved blades; the usual one without it.
+    /// The same with the flight point for whose departure wood is taken off the carved blades; the usual one
+    /// without it.
     #[must_use]
     pub fn planned_for(self, point: Option<usize>) -> Self {
         Self { point, take_off: OnceLock::new(), ..self }
@@ -136,7 +140,8 @@ impl Bench {
         self.planned()?.as_ref().ok()
     }
 
-    /// Why nothing can be planned from the readings of the blades, in words; `None` where there are none, or a plan.
+    /// Why nothing can be planned from the readings of the blades, in words; `None` where there are none, or
+    /// a plan.
     #[must_use]
     pub fn without_plan(&self) -> Option<&str> {
         self.planned()?.as_ref().err().map(String::as_str)
@@ -161,13 +166,15 @@ impl Bench {
         }
     }
 
-    /// A point of a ring on paper, mm: seen from the tip towards the hub, height above the rear of the blank upward.
+    /// A point of a ring on paper, mm: seen from the tip towards the hub, height above the rear of the blank
+    /// upward.
     #[must_use]
     pub fn on_paper(&self, p: [f64; 2]) -> [f64; 2] {
         [1e3 * self.hand() * p[0], 1e3 * (p[1] - self.blank.back_m)]
     }
 
-    /// The closed surface: the whole propeller where it is of one piece, the holes of its hub drilled, else one blade.
+    /// The closed surface: the whole propeller where it is of one piece, the holes of its hub drilled, else
+    /// one blade.
     #[must_use]
     pub fn solid(&self) -> Solid {
         self.solid_of(&self.rings)

@@ -26,8 +26,9 @@ pub(super) fn resultant(of: &[f64]) -> (f64, f64) {
     if x.hypot(y) <= rounding { (0.0, 0.0) } else { (x, y) }
 }
 
-/// Static balance of the blades, hub taken as balanced: the mass moment `∫ ρ A r dr` of each from the hub out, by the
-/// outlines of its sections and the density of the readings, else of the job's wood, else of the usual one.
+/// Static balance of the blades, hub taken as balanced: the mass moment `∫ ρ A r dr` of each from the hub
+/// out, by the outlines of its sections and the density of the readings, else of the job's wood, else of the
+/// usual one.
 pub(super) fn balance(
     rig: &Rig,
     carved: &Carved,
@@ -61,8 +62,9 @@ pub(super) fn balance(
     })
 }
 
-/// `∫ z ρ A r dr` of each blade, kg m²: `z` is how far its masses lie ahead of the plane of the hub, as read, straight between readings, from
-/// nothing at the edge of the hub and held beyond the outermost; a blade without such a reading lies in the plane. `None` where none has one.
+/// `∫ z ρ A r dr` of each blade, kg m²: `z` is how far its masses lie ahead of the plane of the hub, as read,
+/// straight between readings, from nothing at the edge of the hub and held beyond the outermost; a blade
+/// without such a reading lies in the plane. `None` where none has one.
 pub(super) fn track_moments(
     rig: &Rig,
     carved: &Carved,

@@ -2,11 +2,12 @@
 
 /// Passes of the descent; each halves what is left or better.
 const PASSES: u32 = 200;
-/// Weight of evenness beside nearness to what is wanted: blades that match count as much as blades that are right.
+/// Weight of evenness beside nearness to what is wanted: blades that match count as much as blades that are
+/// right.
 const EVENNESS: f64 = 1.0;
 
-/// The values of least `Σ (x − wanted)² + Σ (x − mean)²` within bounds, by descent along each in turn: the sum is
-/// convex and the bounds are those of each alone, so that it comes to the least.
+/// The values of least `Σ (x − wanted)² + Σ (x − mean)²` within bounds, by descent along each in turn: the
+/// sum is convex and the bounds are those of each alone, so that it comes to the least.
 pub(super) fn evened(wanted: f64, bounds: &[(f64, f64)]) -> Vec<f64> {
     let n = bounds.len() as f64;
     let mut x: Vec<f64> = bounds.iter().map(|b| wanted.max(b.0).min(b.1)).collect();

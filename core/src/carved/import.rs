@@ -1,6 +1,6 @@
-//! Readings of carved blades as a sheet: `blade`, `radius` (or `station`, the share of the tip radius), `angle` (or
-//! `face angle`, `chord-line angle`), `chord`, `thickness`, `track`; units in the headings, all but the place may be
-//! missing. An angle may be in degrees and minutes.
+//! Readings of carved blades as a sheet: `blade`, `radius` (or `station`, the share of the tip radius),
+//! `angle` (or `face angle`, `chord-line angle`), `chord`, `thickness`, `track`; units in the headings, all
+//! but the place may be missing. An angle may be in degrees and minutes.
 
 use crate::job::{AngleReference, BladeReading, Carved, CarvedBlade, Propeller};
 use crate::sheet::{Quantity, Row, Sheet, SheetError, likely};
@@ -33,8 +33,9 @@ const QUANTITIES: [Quantity; 9] = [
     Quantity { name: "track", names: &["track"], units: LENGTH, allowed: -0.2..=0.2 },
 ];
 
-/// The readings of a sheet, and the headings that were not used. What the angles were read on is what the heading says,
-/// else what the propeller is measured by; limits and density are those of `before`, where there is one.
+/// The readings of a sheet, and the headings that were not used. What the angles were read on is what the
+/// heading says, else what the propeller is measured by; limits and density are those of `before`, where
+/// there is one.
 ///
 /// # Errors
 /// [`SheetError`] with line, column, what stands there, what is allowed and what may have happened.
@@ -189,8 +190,8 @@ fn put(
     Ok(())
 }
 
-/// An angle in degrees from text: decimals (`18.5`), or degrees and minutes with a sign between them (`18 30`, `18°30'`,
-/// `18:30`). `None` for anything else.
+/// An angle in degrees from text: decimals (`18.5`), or degrees and minutes with a sign between them (`18
+/// 30`, `18°30'`, `18:30`). `None` for anything else.
 #[must_use]
 pub fn angle_of(text: &str) -> Option<f64> {
     let text = trimmed(text);

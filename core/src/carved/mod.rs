@@ -1,10 +1,12 @@
-//! The propeller as carved: what was measured, how far it is from the drawing, what it does, and what can be put right.
+//! The propeller as carved: what was measured, how far it is from the drawing, what it does, and what can be
+//! put right.
 //!
-//! Readings of blade angle, chord and thickness by blade and radius stand in the job (`carved`) or come as a sheet
-//! ([`import`]). Between readings, and where one is missing, the *difference from the drawing* is interpolated by a
-//! monotone cubic over the radius and held beyond the outermost readings; a blade without any reading is taken as the
-//! mean of the others. What is hard to believe ([`doubts`]) is left out until it is confirmed. The propeller of mean blades is matched with engine and aircraft like the drawn one; each blade's
-//! own load is worked out in the flow of that ([`crate::rotor::Rotor::blade_loads`]).
+//! Readings of blade angle, chord and thickness by blade and radius stand in the job (`carved`) or come as a
+//! sheet ([`import`]). Between readings, and where one is missing, the *difference from the drawing* is
+//! interpolated by a monotone cubic over the radius and held beyond the outermost readings; a blade without
+//! any reading is taken as the mean of the others. What is hard to believe ([`doubts`]) is left out until it
+//! is confirmed. The propeller of mean blades is matched with engine and aircraft like the drawn one; each
+//! blade's own load is worked out in the flow of that ([`crate::rotor::Rotor::blade_loads`]).
 //!
 //! What can be put right is in [`plan()`]: wood only comes off.
 

@@ -1,11 +1,13 @@
 //! The removals that best restore departure and even the blades.
 //!
-//! At each radius the wanted angle is the one that gives the drawn blade's departure with the chord and thickness the
-//! plan leaves, in the balance of that element at the flight point's condition as drawn. Within what planing can reach
-//! ([`super::plane`]) each blade takes the angle of least squares both from the wanted one and from the mean of the
-//! blades; chord and thickness likewise, from the drawn ones. Planing at a thin trailing edge costs chord: where less than the drawn chord would
-//! be left, the turn stops where the angle that is still wrong weighs as much as the chord that is lost. Small differences that no plane would set right are left,
-//! and nothing is cut where a blade was not read: beyond its outermost readings, and nowhere where one has none.
+//! At each radius the wanted angle is the one that gives the drawn blade's departure with the chord and
+//! thickness the plan leaves, in the balance of that element at the flight point's condition as drawn. Within
+//! what planing can reach ([`super::plane`]) each blade takes the angle of least squares both from the wanted
+//! one and from the mean of the blades; chord and thickness likewise, from the drawn ones. Planing at a thin
+//! trailing edge costs chord: where less than the drawn chord would be left, the turn stops where the angle
+//! that is still wrong weighs as much as the chord that is lost. Small differences that no plane would set
+//! right are left, and nothing is cut where a blade was not read: beyond its outermost readings, and nowhere
+//! where one has none.
 
 use super::CarvedError;
 use super::even::evened;
@@ -26,15 +28,16 @@ const HALVINGS: u32 = 40;
 /// What is not worth a cut: angle, rad; depth, m.
 const LEAST_TURN_RAD: f64 = 0.02 * std::f64::consts::PI / 180.0;
 const LEAST_CUT_M: f64 = 0.1e-3;
-/// What a lost share of chord weighs as an angle, rad: load goes with chord as `Δc/c` and with angle as `a Δα/cl`, for a lift slope of 5.7 a radian and
-/// a lift coefficient of 0.7.
+/// What a lost share of chord weighs as an angle, rad: load goes with chord as `Δc/c` and with angle as `a
+/// Δα/cl`, for a lift slope of 5.7 a radian and a lift coefficient of 0.7.
 const CHORD_WEIGHT_RAD: f64 = 0.7 / 5.7;
 /// Steps in which the turn is weighed, each leaving two thirds.
 const THIRDS: u32 = 40;
 /// Least factor of tip and hub at which the wanted angle is solved; nearer to the ends it is the drawn one.
 const LEAST_FACTOR: f64 = 0.35;
 
-/// The flight point a plan is judged at without one named: the first in flight that has an answer, else the first that has one.
+/// The flight point a plan is judged at without one named: the first in flight that has an answer, else the
+/// first that has one.
 #[must_use]
 pub fn usual_point(rig: &Rig) -> usize {
     let points = &rig.job.flight_points;
@@ -81,8 +84,8 @@ fn wanted(rig: &Rig, planned: &Measured, at: &Condition) -> Result<Vec<f64>, Car
     Ok(planned.radii_m.iter().map(|&r| angle(r).unwrap_or_else(|| drawn(r))).collect())
 }
 
-/// The blades with every face planed by an angle (rad) that is wanted at its radius, as far as the least chord and thickness allow.
-/// Stations without a flat face, or where a blade was not read, stay as they are.
+/// The blades with every face planed by an angle (rad) that is wanted at its radius, as far as the least
+/// chord and thickness allow. Stations without a flat face, or where a blade was not read, stay as they are.
 #[must_use]
 pub fn planed(rig: &Rig, measured: &Measured, wanted_rad: impl Fn(f64) -> f64) -> Measured {
     let bench = Bench::new(rig, measured);
@@ -97,7 +100,8 @@ pub fn planed(rig: &Rig, measured: &Measured, wanted_rad: impl Fn(f64) -> f64) -
     after
 }
 
-/// The same as what to take off each blade, and what comes of it; the flight point is that for which it is done.
+/// The same as what to take off each blade, and what comes of it; the flight point is that for which it is
+/// done.
 ///
 /// # Errors
 /// No readings; blades that cannot be.
@@ -191,7 +195,8 @@ impl<'r> Bench<'r> {
         after
     }
 
-    /// The blades at a radius. They are cut where all of them were read: one that is turned beside another that is not known may be set farther from it.
+    /// The blades at a radius. They are cut where all of them were read: one that is turned beside another
+    /// that is not known may be set farther from it.
     fn pieces(&self, s: usize) -> Vec<Piece<'_>> {
         let read = [0, 1, 2].map(|k| self.measured.blades.iter().all(|blade| is_read(blade[s].known[k])));
         self.measured.blades.iter().map(|blade| self.piece(s, &blade[s], read)).collect()
@@ -333,7 +338,8 @@ impl Piece<'_> {
         0.5 * (low + high)
     }
 
-    /// The turn towards an angle (rad) at which what is left of its error and what is lost of the drawn chord weigh least.
+    /// The turn towards an angle (rad) at which what is left of its error and what is lost of the drawn chord
+    /// weigh least.
     fn weighed(&self, angle_rad: f64, goal: (f64, f64), drawn_chord_m: f64) -> f64 {
         let turn = self.turn_to(angle_rad, goal);
         let whole = drawn_chord_m.min(self.slab.chord_m);

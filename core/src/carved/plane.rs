@@ -1,12 +1,12 @@
 //! A section under the plane: what wood taken off face, back and edges makes of angle, chord and thickness.
 //!
-//! The face is planed flat from a depth `d` at the leading to a depth `e` at the trailing edge. Over the chord `c` the
-//! face then turns by `atan((d − e)/c)`, leading edge up for `d > e`, and at the share `x` of the chord the section
-//! loses `d (1 − x) + e x` of its height over the face. The greatest thickness is the greatest height left. Where less
-//! is left than the height of the thinner edge, the edge is gone and the chord is shorter: planing at a thin trailing
-//! edge costs chord at once, planing at a round leading edge only past the nose. Wood off the back thins the section
-//! and keeps face and edges. What is left is taken as the family's section of the new thickness, chord and face: the
-//! tables know no other.
+//! The face is planed flat from a depth `d` at the leading to a depth `e` at the trailing edge. Over the
+//! chord `c` the face then turns by `atan((d − e)/c)`, leading edge up for `d > e`, and at the share `x` of
+//! the chord the section loses `d (1 − x) + e x` of its height over the face. The greatest thickness is the
+//! greatest height left. Where less is left than the height of the thinner edge, the edge is gone and the
+//! chord is shorter: planing at a thin trailing edge costs chord at once, planing at a round leading edge
+//! only past the nose. Wood off the back thins the section and keeps face and edges. What is left is taken as
+//! the family's section of the new thickness, chord and face: the tables know no other.
 
 use crate::section::outline::Outline;
 
@@ -69,8 +69,8 @@ impl Profile {
         (most > 0.0).then(|| Self { height: height.iter().map(|h| h.max(0.0) / most).collect() })
     }
 
-    /// A profile by heights at even places from the leading to the trailing edge, the greatest of them 1; `None` for fewer than
-    /// two.
+    /// A profile by heights at even places from the leading to the trailing edge, the greatest of them 1;
+    /// `None` for fewer than two.
     #[must_use]
     pub fn by_heights(height: Vec<f64>) -> Option<Self> {
         (height.len() > 1 && height.iter().all(|h| (0.0..=1.0).contains(h))).then_some(Self { height })
@@ -107,8 +107,8 @@ impl Profile {
 }
 
 impl Cuts {
-    /// The wedge off the face of a chord that turns it by an angle, rad: off the leading edge to turn it up, off the trailing edge
-    /// to turn it down.
+    /// The wedge off the face of a chord that turns it by an angle, rad: off the leading edge to turn it up,
+    /// off the trailing edge to turn it down.
     #[must_use]
     pub fn turning(chord_m: f64, by_rad: f64) -> Self {
         let depth = chord_m * by_rad.abs().tan();
@@ -123,7 +123,8 @@ mod tests {
 
     const SLAB: Slab = Slab { face_rad: 0.3, chord_m: 0.08, thickness_m: 0.01 };
 
-    /// Plane geometry: a rectangle of 80 × 10 mm, 1.4 mm off one end, turns by atan(1.4/80) and keeps its height at the other.
+    /// Plane geometry: a rectangle of 80 × 10 mm, 1.4 mm off one end, turns by atan(1.4/80) and keeps its
+    /// height at the other.
     #[test]
     fn a_wedge_off_a_plank_turns_it_by_its_slope() {
         let plank = Profile::by_heights(vec![1.0; 41]).unwrap();
@@ -133,8 +134,8 @@ mod tests {
         let after = plank.cut(SLAB, &Cuts { face_leading_m: 0.0, ..cuts });
         assert!((after.face_rad - 0.3).abs() < 1e-12 && (after.chord_m - 0.08).abs() < 1e-12);
         let wedge = Profile::by_heights((0..=80).map(|k| 1.0 - f64::from(k) / 80.0).collect()).unwrap();
-        // A wedge 10 mm high at the leading edge and sharp at the trailing edge: turned down by a plane that takes 2 mm off at the
-        // trailing edge, back and face meet where 10 (1 − x) = 2 x, at x = 5/6.
+        // A wedge 10 mm high at the leading edge and sharp at the trailing edge: turned down by a plane that
+        // takes 2 mm off at the trailing edge, back and face meet where 10 (1 − x) = 2 x, at x = 5/6.
         let after = wedge.cut(SLAB, &Cuts { face_trailing_m: 2e-3, ..Cuts::default() });
         assert!((after.chord_m - 0.08 * 5.0 / 6.0).abs() < 1e-6, "{after:?}");
         assert!((after.face_rad - 0.3 + (2e-3_f64 / 0.08).atan()).abs() < 1e-12);
@@ -148,7 +149,8 @@ mod tests {
         let same = profile.cut(SLAB, &Cuts::default());
         assert!((same.chord_m - 0.08).abs() < 1e-9 && (same.thickness_m - 0.01).abs() < 1e-9, "{same:?}");
         let up = profile.cut(SLAB, &Cuts { face_leading_m: 1e-3, ..Cuts::default() });
-        // The section is thickest at about 0.3 of the chord; a millimetre at the leading edge is 0.7 mm there.
+        // The section is thickest at about 0.3 of the chord; a millimetre at the leading edge is 0.7 mm
+        // there.
         assert!((SLAB.thickness_m - up.thickness_m - 0.7e-3).abs() < 0.05e-3, "{up:?}");
         assert!((up.chord_m - SLAB.chord_m).abs() < 1e-9, "{up:?}");
         let down = profile.cut(SLAB, &Cuts { face_trailing_m: 1e-3, ..Cuts::default() });

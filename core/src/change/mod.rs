@@ -1,9 +1,10 @@
 //! What to change so that a flight point has a wanted rpm or speed, and what the change does elsewhere.
 //!
-//! Three ways: the whole blade turned; its outer half turned, from nothing at half the radius to the whole at the tip;
-//! another diameter. Where there are readings of carved blades there is wood already: then turning is planing, within
-//! what each station reaches ([`crate::carved`]), and a diameter only shrinks. Trimmed tips leave everything inboard of them as it is; a
-//! longer drawing is scaled. The amount is sought by bracketing from nothing outward and by Brent's method.
+//! Three ways: the whole blade turned; its outer half turned, from nothing at half the radius to the whole at
+//! the tip; another diameter. Where there are readings of carved blades there is wood already: then turning
+//! is planing, within what each station reaches ([`crate::carved`]), and a diameter only shrinks. Trimmed
+//! tips leave everything inboard of them as it is; a longer drawing is scaled. The amount is sought by
+//! bracketing from nothing outward and by Brent's method.
 
 mod variant;
 
@@ -170,7 +171,8 @@ fn change(
     }
 }
 
-/// How far the blade has turned where it tells: at three quarters of the radius, or at the tip where only the outer half turns, degrees.
+/// How far the blade has turned where it tells: at three quarters of the radius, or at the tip where only the
+/// outer half turns, degrees.
 fn had_deg(before: &Rig, after: &Rig, means: Means) -> Option<f64> {
     let share = match means {
         Means::Pitch => 0.75,
@@ -181,7 +183,8 @@ fn had_deg(before: &Rig, after: &Rig, means: Means) -> Option<f64> {
     Some((angle(after) - angle(before)).to_degrees())
 }
 
-/// The amount nearest to nothing at which the mismatch is nothing; else the one of least mismatch that was looked at.
+/// The amount nearest to nothing at which the mismatch is nothing; else the one of least mismatch that was
+/// looked at.
 fn sought(off: &dyn Fn(f64) -> Option<f64>, at_nothing: f64, low: f64, high: f64) -> Result<f64, f64> {
     let mut best = (at_nothing.abs(), 0.0);
     let (mut below, mut above) = (Some((0.0, at_nothing)), Some((0.0, at_nothing)));

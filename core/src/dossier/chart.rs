@@ -1,4 +1,5 @@
-//! A chart as lines: two axes with round figures and their units, curves told apart by their strokes, a key under it.
+//! A chart as lines: two axes with round figures and their units, curves told apart by their strokes, a key
+//! under it.
 
 use crate::bench::draw::{Anchor, Drawing, Layer, breadth_mm};
 use crate::bench::page::fitted;

@@ -145,7 +145,8 @@ fn over_speed(told: &Told) -> Vec<Chart> {
     ]
 }
 
-/// The speed from which level flight is drawn, m/s: the stall, else where the thrust of full throttle at rest would do, else rest.
+/// The speed from which level flight is drawn, m/s: the stall, else where the thrust of full throttle at rest
+/// would do, else rest.
 fn flies(envelope: &Envelope) -> f64 {
     let stall = envelope.speeds.and_then(|s| s.stall_m_s);
     let thrust = envelope.standing.as_ref().map_or(f64::INFINITY, |s| s.thrust_n);

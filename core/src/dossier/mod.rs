@@ -1,7 +1,9 @@
-//! The whole job as pages to hand in or to keep with the propeller: verdict, inputs, method and validity, charts, stations, strength,
-//! what to carve, readings as carved and of the logbook, cautions. What a job does not have is left out.
+//! The whole job as pages to hand in or to keep with the propeller: verdict, inputs, method and validity,
+//! charts, stations, strength, what to carve, readings as carved and of the logbook, cautions. What a job
+//! does not have is left out.
 //!
-//! Pages are plain drawings ([`crate::bench::Sheet`]): the writers of the bench make SVG or one PDF of them, with charts as lines.
+//! Pages are plain drawings ([`crate::bench::Sheet`]): the writers of the bench make SVG or one PDF of them,
+//! with charts as lines.
 
 mod blade;
 mod carved;
@@ -42,8 +44,8 @@ struct Told<'r> {
     strength: Option<crate::result::Strength>,
 }
 
-/// The pages of a job's dossier, with the units its figures are written in. `point` is the flight point whose air the speed range has and for which wood is
-/// taken off; without it the usual one.
+/// The pages of a job's dossier, with the units its figures are written in. `point` is the flight point whose
+/// air the speed range has and for which wood is taken off; without it the usual one.
 ///
 /// ```
 /// use spokeshave::{bench::Paper, dossier::{Scales, dossier}, job::{DEMOS, Job}, rig::Rig};

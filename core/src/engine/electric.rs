@@ -78,13 +78,14 @@ impl ElectricShaft {
         reachable.then_some(electrics)
     }
 
-    /// Battery current of this motor at a propeller rpm and shaft power, A; at full duty also where that falls short.
+    /// Battery current of this motor at a propeller rpm and shaft power, A; at full duty also where that
+    /// falls short.
     pub(crate) fn battery_current_a(&self, rpm: f64, power_w: f64) -> f64 {
         self.drawn(rpm, power_w).0.battery_current_a
     }
 
-    /// The electric side, duty at most 1, and whether it gives the power. The factor of power stands for what battery and controller
-    /// give short or over: the duty follows it, the current the torque.
+    /// The electric side, duty at most 1, and whether it gives the power. The factor of power stands for what
+    /// battery and controller give short or over: the duty follows it, the current the torque.
     fn drawn(&self, rpm: f64, power_w: f64) -> (Electrics, bool) {
         let motor_rpm = rpm * self.data.gear_ratio;
         let per_a = self.torque_per_a();

@@ -57,9 +57,9 @@ fn held_power_is_held_and_then_falls() {
     assert!((at(3000.0) - 45_000.0).abs() < 1e-6 && at(5000.0) < 40_000.0);
 }
 
-/// Ohm's law: N motors at one duty draw N d I from the battery, so that each meets N d² Rb. With Voc 11.1 V, Rb 3 ×
-/// 0.01 Ω, R 0.05 Ω, Kv 1000 rpm/V at 8 000 rpm and full duty: I = 3.1/(0.05 + 0.03 N), 38.75 A for one motor, 18.235
-/// A for each of four; the battery stands at 11.1 − 0.03 N I.
+/// Ohm's law: N motors at one duty draw N d I from the battery, so that each meets N d² Rb. With Voc 11.1 V,
+/// Rb 3 × 0.01 Ω, R 0.05 Ω, Kv 1000 rpm/V at 8 000 rpm and full duty: I = 3.1/(0.05 + 0.03 N), 38.75 A for
+/// one motor, 18.235 A for each of four; the battery stands at 11.1 − 0.03 N I.
 #[test]
 fn motors_on_one_battery_sag_it_together() {
     let air = Air::standard(0.0, 0.0).unwrap();

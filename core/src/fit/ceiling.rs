@@ -26,8 +26,8 @@ const STEP: f64 = 0.1;
 const MOST_VAIN: u32 = 3;
 const CONVERGED_M: f64 = 0.5;
 
-/// The ceilings of an aeroplane at a temperature offset, as pressure altitudes between sea level and the end of the
-/// atmosphere's table, by the best climb from the stall on. `None` for other jobs.
+/// The ceilings of an aeroplane at a temperature offset, as pressure altitudes between sea level and the end
+/// of the atmosphere's table, by the best climb from the stall on. `None` for other jobs.
 #[must_use]
 pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     let Some(Aircraft::Aeroplane(a)) = &rig.aircraft else { return None };
@@ -48,8 +48,8 @@ pub fn ceilings(rig: &Rig, isa_offset_k: f64) -> Option<Ceilings> {
     Some(Ceilings { service_m: spare(SERVICE_M_S), absolute_m: spare(0.0), sea_level_climb_m_s: lowest })
 }
 
-/// The best rate of climb at full throttle at a height, from the stall on, held to the limit rpm; `None` where there is no
-/// answer at any speed.
+/// The best rate of climb at full throttle at a height, from the stall on, held to the limit rpm; `None`
+/// where there is no answer at any speed.
 fn best_climb_m_s(rig: &Rig, a: &Aeroplane, altitude_m: f64, isa_offset_k: f64) -> Option<f64> {
     let air = Air::standard(altitude_m, isa_offset_k).ok()?;
     let solver = Solver::new(rig);
@@ -72,7 +72,8 @@ fn best_climb_m_s(rig: &Rig, a: &Aeroplane, altitude_m: f64, isa_offset_k: f64) 
     Some(refined.map_or(top.1, |climb| climb.max(top.1)))
 }
 
-/// Values at speeds from the slowest on, up to where several in a row gain nothing; those without an answer are left out.
+/// Values at speeds from the slowest on, up to where several in a row gain nothing; those without an answer
+/// are left out.
 fn uphill(speeds_m_s: Range<f64>, mut value: impl FnMut(f64) -> Option<(f64, f64)>) -> Vec<(f64, f64)> {
     let (mut seen, mut most, mut vain) = (Vec::new(), f64::NEG_INFINITY, 0);
     let mut v = speeds_m_s.start;

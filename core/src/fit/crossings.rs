@@ -9,9 +9,9 @@ use crate::rotor::Condition;
 /// Steps over the engine's range.
 const STEPS: u32 = 48;
 
-/// Every rpm of the engine's range at which the propeller, with its blades as at `at`, takes what full throttle gives at that speed and air,
-/// from low to high. It is stable where the demand rises through the offer; the highest stable one within the limit rpm is chosen. None without an
-/// engine.
+/// Every rpm of the engine's range at which the propeller, with its blades as at `at`, takes what full
+/// throttle gives at that speed and air, from low to high. It is stable where the demand rises through the
+/// offer; the highest stable one within the limit rpm is chosen. None without an engine.
 #[must_use]
 pub fn crossings(rig: &Rig, at: &Condition) -> Vec<Crossing> {
     let Some(shaft) = &rig.shaft else { return Vec::new() };

@@ -1,8 +1,9 @@
-//! The dive with closed throttle: the speed at which the air alone drives the propeller to the engine's limit rpm.
+//! The dive with closed throttle: the speed at which the air alone drives the propeller to the engine's limit
+//! rpm.
 //!
-//! Assumed: the engine at closed throttle neither drives nor brakes, so that the torque is nothing. A real engine
-//! brakes by its friction, for which no figure is asked; the propeller then turns slower at the same speed, so that
-//! the speed given lies on the safe side.
+//! Assumed: the engine at closed throttle neither drives nor brakes, so that the torque is nothing. A real
+//! engine brakes by its friction, for which no figure is asked; the propeller then turns slower at the same
+//! speed, so that the speed given lies on the safe side.
 
 use std::cell::RefCell;
 
@@ -18,8 +19,8 @@ const FASTEST_MACH: f64 = 0.7;
 const LARGEST_J: f64 = 6.0;
 const STEP_J: f64 = 0.1;
 
-/// The freewheeling propeller at the limit rpm, in the air of `at`; the thrust is its drag, below zero. `None`
-/// without a limit rpm, and where that needs more than Mach 0.7 or an advance ratio above 6.
+/// The freewheeling propeller at the limit rpm, in the air of `at`; the thrust is its drag, below zero.
+/// `None` without a limit rpm, and where that needs more than Mach 0.7 or an advance ratio above 6.
 #[must_use]
 pub(super) fn dive(rig: &Rig, at: &Condition) -> Option<Full> {
     let limit = rig.shaft.as_ref()?.limit_rpm()?;

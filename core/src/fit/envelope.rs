@@ -16,9 +16,10 @@ use crate::rotor::{Condition, departure_map, thrustless_speed_m_s};
 /// How far the range goes beyond top speed.
 const BEYOND_TOP: f64 = 1.12;
 
-/// The fit at `count` equal steps of speed (at least 3) from rest to somewhat beyond top speed, at the air of a
-/// flight point, with departures at the given radius fractions. Without an aircraft it ends where the thrust at full
-/// throttle is gone, without an engine there is none; `None` then, and where the engine cannot turn the propeller.
+/// The fit at `count` equal steps of speed (at least 3) from rest to somewhat beyond top speed, at the air of
+/// a flight point, with departures at the given radius fractions. Without an aircraft it ends where the
+/// thrust at full throttle is gone, without an engine there is none; `None` then, and where the engine cannot
+/// turn the propeller.
 #[must_use]
 pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[f64]) -> Option<Envelope> {
     let air = air_of(point).ok()?;
@@ -126,7 +127,8 @@ impl<'r> Course<'r> {
             .iter()
             .map(|&v| {
                 let at = self.here(v);
-                // Once past the limit rpm, a look at that rpm tells whether it still is: near rest a propeller may come to take more with speed.
+                // Once past the limit rpm, a look at that rpm tells whether it still is: near rest a
+                // propeller may come to take more with speed.
                 let past = if held { self.solver.past_limit(&at) } else { None };
                 let full = past.unwrap_or_else(|| self.solver.full(&at, &mut trail));
                 held = match &full {

@@ -23,8 +23,8 @@ impl From<Met> for Full {
     }
 }
 
-/// A condition at an rpm that the propeller has run up to. By then a governor has turned the blades to its coarse
-/// stop; one that holds more than that rpm leaves them at the fine one.
+/// A condition at an rpm that the propeller has run up to. By then a governor has turned the blades to its
+/// coarse stop; one that holds more than that rpm leaves them at the fine one.
 pub(super) fn run_up(rig: &Rig, at: &Condition, rpm: f64) -> Condition {
     let turn_rad = match rig.job.propeller.pitch_control {
         PitchControl::ConstantSpeed { rpm: governed, turn_min_deg, .. } if governed > rpm => {
@@ -37,8 +37,8 @@ pub(super) fn run_up(rig: &Rig, at: &Condition, rpm: f64) -> Condition {
 }
 
 impl Solver<'_> {
-    /// Full throttle or, where it would pass the limit rpm or the end of the engine's curve, that rpm; leads the
-    /// trail on.
+    /// Full throttle or, where it would pass the limit rpm or the end of the engine's curve, that rpm; leads
+    /// the trail on.
     pub(super) fn full(&self, at: &Condition, trail: &mut Trail) -> Result<Full, State> {
         match self.throttle(at, 1.0, trail) {
             Ok(met) => {
@@ -50,8 +50,9 @@ impl Solver<'_> {
         }
     }
 
-    /// The limit rpm, throttled back, or that the air alone drives the propeller past it, where full throttle gives more than the propeller takes there;
-    /// `None` where it does not: then full throttle may be matched below the limit.
+    /// The limit rpm, throttled back, or that the air alone drives the propeller past it, where full throttle
+    /// gives more than the propeller takes there; `None` where it does not: then full throttle may be
+    /// matched below the limit.
     pub(super) fn past_limit(&self, at: &Condition) -> Option<Result<Full, State>> {
         let shaft = self.rig.shaft.as_ref()?;
         let full = self.at_limit(at)?;
@@ -61,7 +62,8 @@ impl Solver<'_> {
         past.then_some(if taken_w > 0.0 { Ok(full) } else { Err(State::OverLimitRpm) })
     }
 
-    /// The limit rpm, throttled back; `None` where the air alone drives the propeller there, which no throttle holds.
+    /// The limit rpm, throttled back; `None` where the air alone drives the propeller there, which no
+    /// throttle holds.
     fn held_at_limit(&self, at: &Condition) -> Option<Full> {
         self.at_limit(at).filter(|full| power_w(&full.loads, &full.condition) > 0.0)
     }

@@ -9,8 +9,8 @@ use crate::result::{HeldAtLimit, State};
 use crate::rig::Rig;
 use crate::rotor::Condition;
 
-/// What a full-throttle flight point comes to when throttled back to the limit rpm; `None` for other settings and states, and where the air alone
-/// drives the propeller to that rpm.
+/// What a full-throttle flight point comes to when throttled back to the limit rpm; `None` for other settings
+/// and states, and where the air alone drives the propeller to that rpm.
 #[must_use]
 pub fn held(rig: &Rig, point: &FlightPoint, air: Air, state: State) -> Option<HeldAtLimit> {
     if point.setting != (Setting::FullThrottle {}) || state != State::OverLimitRpm {

@@ -6,8 +6,8 @@ use crate::job::PitchControl;
 use crate::rig::Rig;
 use crate::rotor::Condition;
 
-/// The standing propeller at idle, in the air of `at`, blades of a governed propeller at the fine stop: a governor cannot hold
-/// so little. `None` without an idle rpm.
+/// The standing propeller at idle, in the air of `at`, blades of a governed propeller at the fine stop: a
+/// governor cannot hold so little. `None` without an idle rpm.
 #[must_use]
 pub(super) fn idle(rig: &Rig, at: &Condition) -> Option<Full> {
     let rpm = rig.shaft.as_ref()?.idle_rpm()?;

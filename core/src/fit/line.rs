@@ -31,9 +31,9 @@ pub enum Along {
     Level,
 }
 
-/// Conditions at equal steps of speed from rest, at the air of `at`: at full throttle as far as the engine can be
-/// matched and, where its limit rpm is what ends that, on at that rpm (throttled back); without an engine at the rpm
-/// of `at`. Up to where the thrust is gone at the rpm of `at`.
+/// Conditions at equal steps of speed from rest, at the air of `at`: at full throttle as far as the engine
+/// can be matched and, where its limit rpm is what ends that, on at that rpm (throttled back); without an
+/// engine at the rpm of `at`. Up to where the thrust is gone at the rpm of `at`.
 #[must_use]
 pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     let count = speeds.max(2);
@@ -45,8 +45,9 @@ pub fn line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     })
 }
 
-/// Conditions at equal steps of speed along level flight at the air of `at`: from the stall (or somewhat below the
-/// speed of least power) to the fastest level flight of the engine. Empty without an aircraft and where nothing is flown level.
+/// Conditions at equal steps of speed along level flight at the air of `at`: from the stall (or somewhat
+/// below the speed of least power) to the fastest level flight of the engine. Empty without an aircraft and
+/// where nothing is flown level.
 #[must_use]
 pub fn level_line(rig: &Rig, at: &Condition, speeds: u32) -> Vec<Condition> {
     let Some((slowest, fastest)) = level_span_m_s(rig, at) else { return Vec::new() };
@@ -76,8 +77,8 @@ fn level_span_m_s(rig: &Rig, at: &Condition) -> Option<(f64, f64)> {
     }
 }
 
-/// Conditions at equal steps of speed between the first and the last of a few, rpm and blade angle following monotone cubics; `None` where
-/// there are too few.
+/// Conditions at equal steps of speed between the first and the last of a few, rpm and blade angle following
+/// monotone cubics; `None` where there are too few.
 fn between(nodes: &[Condition], count: u32) -> Option<Vec<Condition>> {
     let (first, last) = (nodes.first()?, nodes.last()?);
     if nodes.len() < 3 {

@@ -1,5 +1,5 @@
-//! Places of the speed range that decide: the tops of curves by the parabola through three points, and where limits
-//! are passed.
+//! Places of the speed range that decide: the tops of curves by the parabola through three points, and where
+//! limits are passed.
 
 use super::dive::dive;
 use super::envelope::{Followed, stall_m_s};
@@ -33,7 +33,8 @@ pub(super) fn marks(
         let met = solver.level(&here(v), &Trail::beside(&followed.level, v)).ok()?;
         Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
     };
-    // The slowest flight counts too: what is best there would else depend on how near to it a point happens to lie.
+    // The slowest flight counts too: what is best there would else depend on how near to it a point happens
+    // to lie.
     let hovers = matches!(rig.aircraft, Some(Aircraft::Multirotor(_)));
     let slowest = (hovers || stall > 0.0).then_some(stall);
     let climb = |of: fn(&FullThrottle) -> Option<f64>| {
@@ -91,9 +92,9 @@ fn driven(rig: &Rig, f: &Full) -> Mark {
     }
 }
 
-/// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or the
-/// highest point where it is at an end. Only speeds above rest and from the slowest flight on count, whose speed and value come first where they are
-/// known.
+/// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or
+/// the highest point where it is at an end. Only speeds above rest and from the slowest flight on count,
+/// whose speed and value come first where they are known.
 fn summit(
     points: &[EnvelopePoint],
     stall: f64,

@@ -1,4 +1,5 @@
-//! The answer of a flight point from that of a propeller a little different, which saves looking over the whole range.
+//! The answer of a flight point from that of a propeller a little different, which saves looking over the
+//! whole range.
 
 use super::full::Full;
 use super::top_near::TopNear;
@@ -34,8 +35,9 @@ impl From<Full> for Answer {
     }
 }
 
-/// The answer of a flight point, full throttle drawn back where it would pass the limit rpm, level flight whether or not the engine
-/// gives what it takes. Where a near answer leads to none, the whole range is looked over.
+/// The answer of a flight point, full throttle drawn back where it would pass the limit rpm, level flight
+/// whether or not the engine gives what it takes. Where a near answer leads to none, the whole range is
+/// looked over.
 ///
 /// # Errors
 /// Why there is none.

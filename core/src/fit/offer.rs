@@ -23,8 +23,8 @@ pub struct Offer {
     pub taken_w: f64,
 }
 
-/// Offer and demand at `count` rpm over the engine's range, at a flight point's air, airspeed and blade setting (at rest
-/// where it has no airspeed); empty without an engine or such a point.
+/// Offer and demand at `count` rpm over the engine's range, at a flight point's air, airspeed and blade
+/// setting (at rest where it has no airspeed); empty without an engine or such a point.
 #[must_use]
 pub fn offer(rig: &Rig, index: usize, count: u32) -> Vec<Offer> {
     let (Some(shaft), Some(met)) = (&rig.shaft, looked_at(rig, index)) else { return Vec::new() };

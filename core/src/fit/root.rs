@@ -1,8 +1,8 @@
 //! Roots of a demand that rises with one free quantity.
 //!
 //! A look over equal steps with the rotor's few elements finds where the root lies; secant steps with all its
-//! elements refine it. Where the two do not agree (a root at the end of the range, or one that hardly touches zero)
-//! the look is repeated with all elements and the root bracketed.
+//! elements refine it. Where the two do not agree (a root at the end of the range, or one that hardly touches
+//! zero) the look is repeated with all elements and the root bracketed.
 
 use std::ops::RangeInclusive;
 
@@ -56,8 +56,8 @@ pub(super) struct Search<'f> {
 type Bracket = ((f64, f64), (f64, f64));
 
 impl Search<'_> {
-    /// The wanted root at which the demand rises from below to above zero, and how far it lies above that by few
-    /// elements.
+    /// The wanted root at which the demand rises from below to above zero, and how far it lies above that by
+    /// few elements.
     pub(super) fn root(&self) -> Result<(Root, Option<f64>), Missed> {
         let bracketed = || self.exact_root().map(|root| (root, None));
         match self.look(self.rough) {
@@ -81,8 +81,8 @@ impl Search<'_> {
         met.unwrap_or_else(|| Root { x: bracketed((a, b), self.rough, ROUGHLY * self.width()), ..line })
     }
 
-    /// Secant steps with all elements from a root known nearly; `None` when they leave the range or the demand does
-    /// not rise.
+    /// Secant steps with all elements from a root known nearly; `None` when they leave the range or the
+    /// demand does not rise.
     pub(super) fn refined(&self, near: Root) -> Option<Root> {
         self.secant(near, LAST_STEP, false, self.exact)
     }
@@ -131,7 +131,8 @@ impl Search<'_> {
         Ok(Root { x, slope: (b.1 - a.1) / (b.0 - a.0) })
     }
 
-    /// The wanted step over which the demand rises through zero; else where it would, and whether that is in doubt.
+    /// The wanted step over which the demand rises through zero; else where it would, and whether that is in
+    /// doubt.
     fn look(&self, demand: &dyn Fn(f64) -> f64) -> Result<Bracket, (Missed, bool)> {
         let low = *self.range.start();
         let node = |i: u32| low + self.width() * f64::from(i) / f64::from(self.steps);

@@ -49,7 +49,8 @@ pub(super) const STEPS: u32 = 24;
 /// Steps of a look that only asks whether a search is in vain.
 const FEW: u32 = 6;
 
-/// A demand at the speed and air of a condition; above zero when the propeller takes, or gives, more than is asked.
+/// A demand at the speed and air of a condition; above zero when the propeller takes, or gives, more than is
+/// asked.
 pub(super) struct Demand<'a> {
     pub(super) rig: &'a Rig,
     pub(super) at: Condition,
@@ -108,8 +109,8 @@ impl Demand<'_> {
         }
     }
 
-    /// Meets the demand by the free quantity within its range; a trail of neighbouring answers saves the look over
-    /// all of it.
+    /// Meets the demand by the free quantity within its range; a trail of neighbouring answers saves the look
+    /// over all of it.
     pub(super) fn settle(
         &self,
         free: Free,

@@ -1,9 +1,9 @@
 //! What the slipstream's drag leaves of the thrust.
 //!
-//! By momentum theory the dynamic pressure in the developed slipstream is above that of the free air by the thrust
-//! over the disc area, `qs − q = T/A` (H. Glauert, *Airplane Propellers*, 1935, there as `qs/q = 1 + Tc`; from
-//! memory). Parts of drag area f in the slipstreams of N propellers then have the more drag `f T/A`, T of one
-//! propeller, which is the share `f/(N A)` of the thrust of all, at any speed.
+//! By momentum theory the dynamic pressure in the developed slipstream is above that of the free air by the
+//! thrust over the disc area, `qs − q = T/A` (H. Glauert, *Airplane Propellers*, 1935, there as `qs/q = 1 +
+//! Tc`; from memory). Parts of drag area f in the slipstreams of N propellers then have the more drag `f
+//! T/A`, T of one propeller, which is the share `f/(N A)` of the thrust of all, at any speed.
 
 use std::f64::consts::PI;
 

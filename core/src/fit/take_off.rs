@@ -1,8 +1,9 @@
 //! Take-off: the ground roll and the distance to 15 m, from the thrust of an envelope.
 //!
-//! Common practice: the aeroplane rolls without lift (full friction, no induced drag), lifts off at 1.2 and passes 15
-//! m at 1.3 of the stall speed; level hard ground, no wind. The roll is `∫ V dV/a`, `a = (T − q S cd0 − μ W)/m`; from
-//! there to 15 m it is by energy: the height and the gain of speed over the mean of `(T − D)/W`.
+//! Common practice: the aeroplane rolls without lift (full friction, no induced drag), lifts off at 1.2 and
+//! passes 15 m at 1.3 of the stall speed; level hard ground, no wind. The roll is `∫ V dV/a`, `a = (T − q S
+//! cd0 − μ W)/m`; from there to 15 m it is by energy: the height and the gain of speed over the mean of `(T −
+//! D)/W`.
 
 use super::Solver;
 use super::slipstream::kept_share;
@@ -15,8 +16,8 @@ use crate::result::{Envelope, TakeOff};
 use crate::rig::Rig;
 use crate::rotor::Condition;
 
-/// Rolling friction over weight where the job gives none: short grass or firm ground; common practice gives 0.02
-/// (hard runway) to 0.1 (long grass).
+/// Rolling friction over weight where the job gives none: short grass or firm ground; common practice gives
+/// 0.02 (hard runway) to 0.1 (long grass).
 const ROLLING_FRICTION: f64 = 0.04;
 const LIFT_OFF: f64 = 1.2;
 const SCREEN: f64 = 1.3;
@@ -26,8 +27,8 @@ const STEPS: u32 = 200;
 /// Speeds of a quick look.
 const FEW: u32 = 6;
 
-/// Take-off at the air of an envelope. `None` without an aeroplane with a greatest lift coefficient, and where thrust
-/// does not suffice to get there.
+/// Take-off at the air of an envelope. `None` without an aeroplane with a greatest lift coefficient, and
+/// where thrust does not suffice to get there.
 #[must_use]
 pub fn take_off(rig: &Rig, envelope: &Envelope) -> Option<TakeOff> {
     let air = Air::standard(envelope.altitude_m, envelope.isa_offset_k).ok()?;

@@ -1,8 +1,9 @@
 //! Top speed from that of a propeller a little different: airspeed and rpm at once.
 //!
-//! Two remainders, the thrust left over and the power left over (or what is left to the limit rpm, where the throttle holds that), are
-//! brought to nothing by C. G. Broyden's method (Mathematics of Computation 19, 1965), whose matrix is kept from one
-//! propeller to the next. Whatever casts doubt on the answer is left to the look over all speeds.
+//! Two remainders, the thrust left over and the power left over (or what is left to the limit rpm, where the
+//! throttle holds that), are brought to nothing by C. G. Broyden's method (Mathematics of Computation 19,
+//! 1965), whose matrix is kept from one propeller to the next. Whatever casts doubt on the answer is left to
+//! the look over all speeds.
 
 use super::full::Full;
 use super::slipstream::kept_share;
@@ -46,7 +47,8 @@ impl TopNear {
         &self.full
     }
 
-    /// The answer of a propeller a little different, with fixed blades, at the air of `at`; `None` where this one does not lead there.
+    /// The answer of a propeller a little different, with fixed blades, at the air of `at`; `None` where this
+    /// one does not lead there.
     pub(super) fn on(mut self, rig: &Rig, at: &Condition) -> Option<Self> {
         if matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. }) {
             return None;
@@ -80,7 +82,8 @@ impl TopNear {
     }
 }
 
-/// What is left over of thrust, as a share of what is asked, and of power or rpm, as a share of what is offered.
+/// What is left over of thrust, as a share of what is asked, and of power or rpm, as a share of what is
+/// offered.
 fn left_over(rig: &Rig, at: &Condition, held: bool, elements: &mut Neighbour) -> Option<([f64; 2], Loads)> {
     let (aircraft, shaft) = (rig.aircraft.as_ref()?, rig.shaft.as_ref()?);
     let loads = rig.rotor.loads_near(at, elements);
@@ -116,14 +119,16 @@ fn measured(
     Some([rise(0), rise(1)])
 }
 
-/// The step after which nothing is left over, were the rises true; `None` where it is long or they tell nothing.
+/// The step after which nothing is left over, were the rises true; `None` where it is long or they tell
+/// nothing.
 fn to_nothing(&[[a, b], [c, d]]: &Rises, [p, q]: [f64; 2]) -> Option<[f64; 2]> {
     let determinant = a * d - b * c;
     let step = [(b * q - d * p) / determinant, (c * p - a * q) / determinant];
     step.iter().all(|s| s.abs() <= FARTHEST).then_some(step)
 }
 
-/// Whether a faster flight lacks thrust, the rpm is stable and within the limits, and the engine gives what a held one takes.
+/// Whether a faster flight lacks thrust, the rpm is stable and within the limits, and the engine gives what a
+/// held one takes.
 fn sound(rig: &Rig, at: &Condition, loads: &Loads, held: bool, &[[a, b], [c, d]]: &Rises) -> bool {
     let Some(shaft) = &rig.shaft else { return false };
     let (rpm, taken) = (rpm_of(at), power_w(loads, at));

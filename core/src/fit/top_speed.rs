@@ -15,8 +15,8 @@ use crate::rotor::Condition;
 
 /// How far a step goes, as a share of the speed.
 const STEP: f64 = 0.15;
-/// Where an aeroplane's steps begin, as a share of the speed of least power: below it the drag's power rises and the
-/// propeller's falls.
+/// Where an aeroplane's steps begin, as a share of the speed of least power: below it the drag's power rises
+/// and the propeller's falls.
 const FIRST: f64 = 0.7;
 /// Where a multirotor's steps begin, m/s.
 const FIRST_CLIMBING_M_S: f64 = 1.0;
@@ -95,7 +95,8 @@ impl<'r> Chase<'r> {
                     }
                     _ => limit = State::OutOfReach,
                 },
-                // Too slow for the engine to turn it, from rest or after the propeller has come to take more; the wind of more speed may help.
+                // Too slow for the engine to turn it, from rest or after the propeller has come to take more;
+                // the wind of more speed may help.
                 Err(State::EngineCannotTurnIt) => (last, limit) = (None, State::EngineCannotTurnIt),
                 // Past the engine's range before thrust falls to drag: that is what stops the aircraft.
                 Err(state) => {
@@ -108,7 +109,8 @@ impl<'r> Chase<'r> {
         last.map(|low| (low, low * (1.0 + STEP), limit)).ok_or(limit)
     }
 
-    /// The slowest speed at which the engine turns the propeller, between one at which it does not and one at which it does.
+    /// The slowest speed at which the engine turns the propeller, between one at which it does not and one at
+    /// which it does.
     fn first_turned(&self, mut slow: f64, mut fast: f64) -> f64 {
         for _ in 0..BISECTIONS {
             let middle = 0.5 * (slow + fast);
@@ -131,8 +133,8 @@ impl<'r> Chase<'r> {
         spare.map_or(1.0, |spare| -spare)
     }
 
-    /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range ends
-    /// first.
+    /// The condition at which thrust meets what is asked between two speeds; `None` where the engine's range
+    /// ends first.
     fn met(&self, rough: &Self, low: f64, high: f64) -> Option<Full> {
         let (trail, rough_trail) = <(RefCell<Trail>, RefCell<Trail>)>::default();
         let search = Search {

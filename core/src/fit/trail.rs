@@ -37,7 +37,8 @@ impl Trail {
         Self { trusted: past.len() == MOST, past, ..Self::default() }
     }
 
-    /// The last answer alone with what is known of the elements: a guess for another propeller at the same speed.
+    /// The last answer alone with what is known of the elements: a guess for another propeller at the same
+    /// speed.
     pub(super) fn newest(self) -> Self {
         Self { past: self.past.into_iter().take(1).collect(), elements: self.elements, ..Self::default() }
     }
@@ -64,7 +65,8 @@ impl Trail {
         self.past.truncate(MOST);
     }
 
-    /// The roots of the last answers, followed on to a speed by the polynomial through them (Neville's scheme).
+    /// The roots of the last answers, followed on to a speed by the polynomial through them (Neville's
+    /// scheme).
     fn on_the_curve(&self, airspeed_m_s: f64) -> f64 {
         let mut x: Vec<f64> = self.past.iter().map(|(_, met)| met.root.x).collect();
         for order in 1..x.len() {
@@ -83,8 +85,8 @@ impl Trail {
         x.is_finite().then(|| Root { x: x.clamp(*range.start(), *range.end()), slope })
     }
 
-    /// The root near a guess, and how far it lies above that by few elements; a guess that is not to be trusted is
-    /// bettered by few elements first.
+    /// The root near a guess, and how far it lies above that by few elements; a guess that is not to be
+    /// trusted is bettered by few elements first.
     pub(super) fn followed(&self, guess: Root, search: &Search) -> Option<(Root, Option<f64>)> {
         let above = self.past.first().and_then(|(_, met)| met.above_rough);
         if self.trusted {

@@ -17,10 +17,10 @@ const HALVINGS: u32 = 6;
 /// Steps without gain after which a side is given up.
 const MOST_VAIN: u32 = 4;
 
-/// What turning the blades would gain at a flight point: at a throttle setting or a power in thrust, at top speed in
-/// speed, in level flight in shaft power. The engine is held at its limit rpm where it would pass it. The blades are
-/// turned from where they stand as long as that betters it. `None` for a constant-speed propeller, whose blades turn
-/// as it is, and for a flight point by rpm, at which nothing is to be gained.
+/// What turning the blades would gain at a flight point: at a throttle setting or a power in thrust, at top
+/// speed in speed, in level flight in shaft power. The engine is held at its limit rpm where it would pass
+/// it. The blades are turned from where they stand as long as that betters it. `None` for a constant-speed
+/// propeller, whose blades turn as it is, and for a flight point by rpm, at which nothing is to be gained.
 #[must_use]
 pub fn pitch_worth(rig: &Rig, point: &FlightPoint) -> Option<PitchWorth> {
     if matches!(rig.job.propeller.pitch_control, PitchControl::ConstantSpeed { .. }) {
@@ -78,7 +78,8 @@ fn figure(rig: &Rig, point: &FlightPoint, turn_deg: f64) -> Option<f64> {
     }
 }
 
-/// The turn of the highest value with that value: the best of a look by equal steps, which are then halved round it.
+/// The turn of the highest value with that value: the best of a look by equal steps, which are then halved
+/// round it.
 fn highest(value: &dyn Fn(f64) -> Option<f64>) -> Option<(f64, f64)> {
     let known = |turn: f64| value(turn).map(|v| (turn, v));
     let stands = known(0.0);
@@ -99,8 +100,8 @@ fn highest(value: &dyn Fn(f64) -> Option<f64>) -> Option<(f64, f64)> {
 /// A turn of the blades and the value there.
 type Turned = (f64, f64);
 
-/// The best by equal steps from where the blades stand towards an end, given up after four steps that gain nothing:
-/// a blade that stands stalled may first get worse.
+/// The best by equal steps from where the blades stand towards an end, given up after four steps that gain
+/// nothing: a blade that stands stalled may first get worse.
 fn uphill(known: &dyn Fn(f64) -> Option<Turned>, stands: Option<Turned>, end_deg: f64) -> Option<Turned> {
     let steps = (end_deg.abs() / STEP_DEG).round() as u32;
     let (mut best, mut vain) = (stands, 0);

@@ -1,7 +1,7 @@
 //! Parts of the job file that come in kinds: `{"kind": "piston", …}`.
 //!
-//! Serde's own tagging loses the path of an error inside; here the kind is taken out first and the rest is read
-//! with its path kept, which the message carries in front, set off by [`PATH_MARK`].
+//! Serde's own tagging loses the path of an error inside; here the kind is taken out first and the rest is
+//! read with its path kept, which the message carries in front, set off by [`PATH_MARK`].
 
 use serde::de::{DeserializeOwned, Error};
 use serde_json::Value;

@@ -1,7 +1,7 @@
 //! The job file as written: one JSON document, SI units, names fixed.
 //!
-//! These are plain data. [`super::Job::from_json`] reads and checks them; [`crate::rig::Rig`] turns them into what is
-//! computed.
+//! These are plain data. [`super::Job::from_json`] reads and checks them; [`crate::rig::Rig`] turns them into
+//! what is computed.
 
 mod aircraft;
 mod carved;
@@ -88,8 +88,8 @@ pub struct Section {
     /// The same angle by rising thickness, in place of `face_angle_deg`, for polars of several thicknesses.
     #[serde(default, skip_serializing_if = "Vec::is_empty")]
     pub face_angles: Vec<FaceAngle>,
-    /// Points of the outline in chords, from one side of the trailing edge round the nose to the other, so that it
-    /// can be drawn; left out when it is not known.
+    /// Points of the outline in chords, from one side of the trailing edge round the nose to the other, so
+    /// that it can be drawn; left out when it is not known.
     #[serde(default, skip_serializing_if = "Vec::is_empty")]
     pub outline: Vec<[f64; 2]>,
     /// Korn factor for drag divergence.
@@ -126,7 +126,8 @@ pub enum TipLoss {
     /// Prandtl's (1919): flat sheets behind the blades.
     #[default]
     Prandtl,
-    /// Goldstein's (1929): helical sheets. Exact for light loads; at coarse pitch and with few blades smaller than Prandtl's.
+    /// Goldstein's (1929): helical sheets. Exact for light loads; at coarse pitch and with few blades smaller
+    /// than Prandtl's.
     Goldstein,
 }
 

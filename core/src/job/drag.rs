@@ -5,7 +5,8 @@ use std::f64::consts::PI;
 use super::Drag;
 use crate::aircraft::induced_factor;
 
-/// Oswald factor that an aspect ratio is worked out with: common practice for a plain wing on a small aircraft.
+/// Oswald factor that an aspect ratio is worked out with: common practice for a plain wing on a small
+/// aircraft.
 const USUAL_OSWALD: f64 = 0.8;
 
 impl Drag {
@@ -15,8 +16,8 @@ impl Drag {
         Self { cd0: self.cd0, k: Some(induced_factor(self)), aspect_ratio: None, oswald: None }
     }
 
-    /// The same drag by aspect ratio and Oswald factor: as given, else the ratio that makes it so with the usual factor,
-    /// `AR = 1/(π e k)`.
+    /// The same drag by aspect ratio and Oswald factor: as given, else the ratio that makes it so with the
+    /// usual factor, `AR = 1/(π e k)`.
     #[must_use]
     pub fn by_aspect_ratio(&self) -> Self {
         let oswald = self.oswald.unwrap_or(USUAL_OSWALD);

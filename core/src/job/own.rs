@@ -70,8 +70,8 @@ impl Section {
 }
 
 impl Job {
-    /// The outline of a section at a thickness ratio: of the job's own section of that name, or of the one that comes with the
-    /// program. `None` where there is none or it cannot be drawn that thick.
+    /// The outline of a section at a thickness ratio: of the job's own section of that name, or of the one
+    /// that comes with the program. `None` where there is none or it cannot be drawn that thick.
     #[must_use]
     pub fn section_outline(&self, name: &str, thickness_ratio: f64) -> Option<Outline> {
         match self.sections.iter().find(|own| own.name == name) {

@@ -9,8 +9,8 @@ use crate::job::{Factors, LogReading};
 use crate::rig::{Rig, rotation_rad_s};
 use crate::rotor::Condition;
 
-/// How far a reading may be off, as shares, standard deviations: of the rpm, of the airspeed, of the fuel flow or current.
-/// A choice: what careful reading of ordinary instruments gives.
+/// How far a reading may be off, as shares, standard deviations: of the rpm, of the airspeed, of the fuel
+/// flow or current. A choice: what careful reading of ordinary instruments gives.
 pub const READING_WIDTHS: [f64; 3] = [0.01, 0.02, 0.02];
 /// Step of the slopes, as a share.
 const STEP: f64 = 0.01;
@@ -24,7 +24,8 @@ pub(super) fn air(reading: &LogReading) -> Option<Air> {
     Some(Air::of(reading.pressure_pa.unwrap_or(at.pressure_pa), temperature_k.unwrap_or(at.temperature_k)))
 }
 
-/// The logarithms of the factors, by which the estimate goes: engine power, drag area, propeller power, consumption.
+/// The logarithms of the factors, by which the estimate goes: engine power, drag area, propeller power,
+/// consumption.
 pub(super) const COUNT: usize = 4;
 
 /// The factors of their logarithms.
@@ -79,8 +80,8 @@ struct Here {
 }
 
 impl<'r> Equation<'r> {
-    /// `None` where the reading tells nothing: no engine, no rpm, an air or a load that has no answer, neither full throttle nor level flight
-    /// nor a consumption.
+    /// `None` where the reading tells nothing: no engine, no rpm, an air or a load that has no answer,
+    /// neither full throttle nor level flight nor a consumption.
     pub(super) fn new(rig: &'r Rig, reading: &LogReading) -> Option<Self> {
         let shaft = rig.shaft.as_ref()?;
         let measured = reading.fuel_kg_per_h.or(reading.current_a).filter(|m| *m > 0.0);
@@ -177,8 +178,8 @@ impl<'r> Equation<'r> {
         Some((whitened(&self.factor, &sum(&self.mismatches(&here, x)?, &self.shift)), slopes?))
     }
 
-    /// Moves to the rpm and airspeed that, with these factors, are the most likely for what was read, so that the slopes do not
-    /// follow the errors of the reading.
+    /// Moves to the rpm and airspeed that, with these factors, are the most likely for what was read, so that
+    /// the slopes do not follow the errors of the reading.
     pub(super) fn believe(&mut self, x: &[f64]) -> Option<()> {
         let residual = self.residual(x)?;
         let moved = |k: usize| -> f64 {
@@ -190,7 +191,8 @@ impl<'r> Equation<'r> {
         self.linearise(x)
     }
 
-    /// Slopes with rpm and airspeed where it stands; the covariance of the mismatches, which share these errors.
+    /// Slopes with rpm and airspeed where it stands; the covariance of the mismatches, which share these
+    /// errors.
     fn linearise(&mut self, x: &[f64]) -> Option<()> {
         let at = |rpm: f64, airspeed: f64| {
             self.mismatches(&self.here((self.at.0 + rpm, self.at.1 + airspeed))?, x)

@@ -1,5 +1,6 @@
-//! Readings of a logbook as a sheet: `rpm` and any of `altitude` or `pressure`, `temperature`, `airspeed` (true), `throttle` (`full`, a
-//! share, or a percentage by its heading or with its own %), `level` (`yes`), `fuel`, `current`, `note`; units in the headings.
+//! Readings of a logbook as a sheet: `rpm` and any of `altitude` or `pressure`, `temperature`, `airspeed`
+//! (true), `throttle` (`full`, a share, or a percentage by its heading or with its own %), `level` (`yes`),
+//! `fuel`, `current`, `note`; units in the headings.
 
 use crate::job::{LogReading, Logbook};
 use crate::sheet::{Quantity, Row, Sheet, SheetError};
@@ -64,7 +65,8 @@ const QUANTITIES: [Quantity; 10] = [
     Quantity { name: "note", names: &["note", "remark", "what"], units: NONE, allowed: 0.0..=0.0 },
 ];
 
-/// The readings of a sheet, and the headings that were not used; widths and factors are those of `before`, where there is one.
+/// The readings of a sheet, and the headings that were not used; widths and factors are those of `before`,
+/// where there is one.
 ///
 /// # Errors
 /// [`SheetError`] with line, column, what stands there, what is allowed and what may have happened.

@@ -1,14 +1,17 @@
 //! From readings of ground runs and flights to what engine, aircraft and propeller really do.
 //!
-//! Three factors are sought: engine power, drag area (drag without lift), power taken by the propeller; and a fourth by
-//! which fuel flow or current goes wrong. A reading at full throttle says that the engine gives what the propeller takes
-//! at the rpm read; one of level flight that thrust is drag; a fuel flow or current what power was taken. The logarithms of these
-//! quotients are the mismatches; the errors of rpm, airspeed and consumption ([`READING_WIDTHS`]), which mismatches of one
-//! reading share, give their covariance, taken where the reading most likely was. Least squares with the prior widths of the job ([`crate::job::Widths`]) by Gauss
-//! and Newton; uncertainties from the inverse of the normal matrix. Readings that stay far off are flagged and left out.
+//! Three factors are sought: engine power, drag area (drag without lift), power taken by the propeller; and a
+//! fourth by which fuel flow or current goes wrong. A reading at full throttle says that the engine gives
+//! what the propeller takes at the rpm read; one of level flight that thrust is drag; a fuel flow or current
+//! what power was taken. The logarithms of these quotients are the mismatches; the errors of rpm, airspeed
+//! and consumption ([`READING_WIDTHS`]), which mismatches of one reading share, give their covariance, taken
+//! where the reading most likely was. Least squares with the prior widths of the job ([`crate::job::Widths`])
+//! by Gauss and Newton; uncertainties from the inverse of the normal matrix. Readings that stay far off are
+//! flagged and left out.
 //!
-//! The propeller is the carved one where the job has readings of it. At the governed rpm a governor hides what a constant-speed propeller
-//! takes; below it the blades are on the fine stop, and the reading tells as much as that of a fixed pitch.
+//! The propeller is the carved one where the job has readings of it. At the governed rpm a governor hides
+//! what a constant-speed propeller takes; below it the blades are on the fine stop, and the reading tells as
+//! much as that of a fixed pitch.
 
 mod equation;
 pub mod import;
@@ -175,7 +178,8 @@ fn factors_found(found: &Found, widths: &[f64; COUNT], titles: [&'static str; CO
     (0..COUNT).map(one).collect()
 }
 
-/// Factors that are tied to one another by the readings: with the same width before, neither is known as well as their quotient.
+/// Factors that are tied to one another by the readings: with the same width before, neither is known as well
+/// as their quotient.
 fn pairs(found: &Found, widths: &[f64; COUNT]) -> Vec<Pair> {
     let c = &found.covariance;
     let pair = |(i, j): (usize, usize)| {
@@ -218,7 +222,8 @@ fn line(before: &Rig, after: &Rig, r: &LogReading, equation: Option<&Equation>, 
     }
 }
 
-/// The condition expected at a reading's air and speed: at its throttle where that tells, else in level flight.
+/// The condition expected at a reading's air and speed: at its throttle where that tells, else in level
+/// flight.
 fn expected(rig: &Rig, r: &LogReading) -> Option<Condition> {
     let piston = matches!(rig.shaft, Some(crate::engine::Shaft::Piston(_)));
     let setting = match r.throttle {

@@ -50,7 +50,8 @@ pub(super) fn times(a: &[Vec<f64>], x: &[f64]) -> Vec<f64> {
 mod tests {
     use super::*;
 
-    /// The matrix of ones with 2 on its diagonal: its inverse in closed form has n/(n + 1) on the diagonal and −1/(n + 1) beside it.
+    /// The matrix of ones with 2 on its diagonal: its inverse in closed form has n/(n + 1) on the diagonal
+    /// and −1/(n + 1) beside it.
     #[test]
     fn a_known_matrix_is_inverted() {
         let a: Vec<Vec<f64>> =

@@ -3,7 +3,8 @@
 use super::equation::{COUNT, Equation};
 use super::normal::{factor, inverse, times};
 
-/// A residual of more than this many standard deviations counts less (P. J. Huber, Annals of Mathematical Statistics 35(1), 1964: about 1.345 to 1.5).
+/// A residual of more than this many standard deviations counts less (P. J. Huber, Annals of Mathematical
+/// Statistics 35(1), 1964: about 1.345 to 1.5).
 const HUBER: f64 = 1.5;
 /// A reading this many standard deviations off is left out of the last fit.
 pub(super) const OUTLIER: f64 = 3.5;
@@ -21,8 +22,9 @@ pub(super) struct Found {
     pub(super) off: Vec<Option<f64>>,
 }
 
-/// The logarithms of least `Σ (residuals)² + Σ (x/width)²`: first with far readings counting less, then without those that stay far. Rpm
-/// and airspeed have errors too, so that between fits each reading moves to what it most likely was.
+/// The logarithms of least `Σ (residuals)² + Σ (x/width)²`: first with far readings counting less, then
+/// without those that stay far. Rpm and airspeed have errors too, so that between fits each reading moves to
+/// what it most likely was.
 pub(super) fn solve(equations: &mut [Option<Equation>], widths: &[f64; COUNT]) -> Option<Found> {
     let all: Vec<bool> = equations.iter().map(Option::is_some).collect();
     let mut found = fitted(equations, widths, &all, true)?;

@@ -147,10 +147,11 @@ pub struct OncePerTurn {
     pub moment_n_m: f64,
     /// Force across the shaft by unequal drag of the blades, N.
     pub air_force_n: f64,
-    /// Force across the shaft by unequal masses, N: unbalance times the square of the speed of rotation; `None` where chord and thickness were not
-    /// read on every blade.
+    /// Force across the shaft by unequal masses, N: unbalance times the square of the speed of rotation;
+    /// `None` where chord and thickness were not read on every blade.
     pub mass_force_n: Option<f64>,
-    /// Moment across the shaft by blades whose masses lie ahead of one another, N m; `None` where no track was read.
+    /// Moment across the shaft by blades whose masses lie ahead of one another, N m; `None` where no track
+    /// was read.
     pub track_moment_n_m: Option<f64>,
 }
 
@@ -172,8 +173,8 @@ pub struct StaticBalance {
     pub density_kg_m3: f64,
     /// Whether the job gives it; otherwise it is a usual one.
     pub density_given: bool,
-    /// Whether chord or thickness was read on every blade. Otherwise the masses are those of the drawing or of other
-    /// blades, and the balance tells nothing of the wood.
+    /// Whether chord or thickness was read on every blade. Otherwise the masses are those of the drawing or
+    /// of other blades, and the balance tells nothing of the wood.
     pub read: bool,
     /// Each blade.
     pub blades: Vec<MassOf>,
@@ -338,7 +339,8 @@ pub struct PlannedStation {
     pub thickness_m: f64,
     /// Whether there is a flat face to plane.
     pub has_face: bool,
-    /// Whether the blade's angle was read here or on both sides of here. Where it was not, the face is not turned.
+    /// Whether the blade's angle was read here or on both sides of here. Where it was not, the face is not
+    /// turned.
     pub read: bool,
 }
 

@@ -5,8 +5,8 @@ use serde::Serialize;
 use super::{Figures, Meeting, State};
 use crate::aircraft::Speeds;
 
-/// What a flight point's setting would give if the throttle were drawn back to hold the engine at its limit rpm (or
-/// at the end of its curve), where full throttle would pass it.
+/// What a flight point's setting would give if the throttle were drawn back to hold the engine at its limit
+/// rpm (or at the end of its curve), where full throttle would pass it.
 #[derive(Clone, Debug, PartialEq, Serialize)]
 pub struct HeldAtLimit {
     /// True airspeed, m/s; for top speed the fastest level flight so held.
@@ -53,15 +53,16 @@ impl Envelope {
         self.points.first().filter(|p| p.airspeed_m_s == 0.0)?.asked_n
     }
 
-    /// How much full throttle falls short of holding a multirotor up, all rotors together, N; `None` where it does not.
+    /// How much full throttle falls short of holding a multirotor up, all rotors together, N; `None` where it
+    /// does not.
     #[must_use]
     pub fn hover_short_n(&self) -> Option<f64> {
         let short = self.hover_n()? - self.standing.as_ref()?.thrust_n;
         (short > 0.0).then_some(short)
     }
 
-    /// First and last speed (m/s) of the range at which full throttle cannot turn the propeller at any rpm of the engine's
-    /// power curve; `None` where there is no such speed.
+    /// First and last speed (m/s) of the range at which full throttle cannot turn the propeller at any rpm of
+    /// the engine's power curve; `None` where there is no such speed.
     #[must_use]
     pub fn too_slow_to_turn_m_s(&self) -> Option<(f64, f64)> {
         let mut there = self.points.iter().filter(|p| p.full_state == State::EngineCannotTurnIt);
@@ -75,8 +76,8 @@ impl Envelope {
 pub struct EnvelopePoint {
     /// True airspeed, m/s.
     pub airspeed_m_s: f64,
-    /// Thrust that level flight asks of all propellers, the drag with what the slipstream adds to it, or the weight
-    /// of a multirotor, N.
+    /// Thrust that level flight asks of all propellers, the drag with what the slipstream adds to it, or the
+    /// weight of a multirotor, N.
     pub asked_n: Option<f64>,
     /// Full throttle; `None` where there is no answer.
     pub full: Option<FullThrottle>,
@@ -84,8 +85,8 @@ pub struct EnvelopePoint {
     pub full_state: State,
     /// Level flight (or hover); `None` where no rpm gives the thrust.
     pub level: Option<Level>,
-    /// Why level flight has no answer; `ok` otherwise. An answer beyond the engine's power or limit stands, marked by
-    /// this.
+    /// Why level flight has no answer; `ok` otherwise. An answer beyond the engine's power or limit stands,
+    /// marked by this.
     pub level_state: State,
 }
 
@@ -167,16 +168,16 @@ pub struct Marks {
     pub best_range: Option<Mark>,
     /// Longest time aloft, s.
     pub best_endurance: Option<Mark>,
-    /// Dive with closed throttle in which the air alone drives the propeller to the limit rpm, the engine neither
-    /// driving nor braking (an engine that brakes allows more speed); the value is the propellers' thrust, N, below
-    /// zero. What the airframe allows is another limit.
+    /// Dive with closed throttle in which the air alone drives the propeller to the limit rpm, the engine
+    /// neither driving nor braking (an engine that brakes allows more speed); the value is the
+    /// propellers' thrust, N, below zero. What the airframe allows is another limit.
     pub closed_throttle_dive: Option<Mark>,
     /// Standing at the engine's idle rpm; the value is the thrust of all propellers, N.
     pub idle: Option<Mark>,
     /// Speed from which full throttle would pass the engine's limit rpm or the end of its curve, m/s.
     pub limit_rpm_from_m_s: Option<f64>,
-    /// Speeds at which the tip at full throttle passes the Mach numbers of [`TIP_MACHS`], m/s, each where it is
-    /// passed.
+    /// Speeds at which the tip at full throttle passes the Mach numbers of [`TIP_MACHS`], m/s, each where it
+    /// is passed.
     pub tip_mach_from: Vec<TipMach>,
 }
 
@@ -189,8 +190,8 @@ pub struct TipMach {
     pub airspeed_m_s: f64,
 }
 
-/// Helical Mach numbers of the tip that an envelope looks for. Common practice: above about 0.85 a propeller loses
-/// efficiency and grows loud, above 0.92 badly so.
+/// Helical Mach numbers of the tip that an envelope looks for. Common practice: above about 0.85 a propeller
+/// loses efficiency and grows loud, above 0.92 badly so.
 pub const TIP_MACHS: [f64; 2] = [0.85, 0.92];
 
 /// Take-off on level hard ground without wind.
@@ -277,8 +278,8 @@ pub struct Fit {
     pub take_off: Option<TakeOff>,
     /// Ceilings, at the flight point's temperature offset.
     pub ceilings: Option<Ceilings>,
-    /// What turning the blades would gain at each flight point of the job at which it could gain anything; empty
-    /// where it was not asked for.
+    /// What turning the blades would gain at each flight point of the job at which it could gain anything;
+    /// empty where it was not asked for.
     pub pitch_worth: Vec<PitchWorth>,
     /// Where propeller and engine agree at rest, blades as drawn.
     pub standing_crossings: Vec<Crossing>,

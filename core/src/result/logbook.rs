@@ -50,7 +50,8 @@ pub struct FactorFound {
     pub deviation: f64,
     /// Standard deviation before anything was read, as a share.
     pub width: f64,
-    /// Whether the readings tell it: they have narrowed it to less than six tenths of what was thought before.
+    /// Whether the readings tell it: they have narrowed it to less than six tenths of what was thought
+    /// before.
     pub told: bool,
 }
 
@@ -84,7 +85,8 @@ pub struct LogLine {
     pub before_consumption: Option<f64>,
     /// The same with the factors.
     pub after_consumption: Option<f64>,
-    /// How far off it is with the factors, in standard deviations of its own errors; `None` where it tells nothing.
+    /// How far off it is with the factors, in standard deviations of its own errors; `None` where it tells
+    /// nothing.
     pub off: Option<f64>,
     /// Whether it is so far off that it was left out.
     pub outlier: bool,
@@ -119,8 +121,8 @@ pub struct Change {
     pub state: State,
     /// Whether it is done by taking wood off the carved blade.
     pub by_removal: bool,
-    /// How far the blade then has turned, degrees: at three quarters of the radius, or at the tip where only the outer half turns; less than `amount` where
-    /// wood sets a bound.
+    /// How far the blade then has turned, degrees: at three quarters of the radius, or at the tip where only
+    /// the outer half turns; less than `amount` where wood sets a bound.
     pub had_deg: Option<f64>,
     /// What to take off carved blades, and what comes of it.
     pub plan: Option<RemovalPlan>,

@@ -85,10 +85,11 @@ pub struct Twist {
     pub weights: Vec<(String, f64)>,
     /// Stations from hub to tip.
     pub stations: Vec<TwistStation>,
-    /// Whether blade and settings agree. Where a governor holds the rpm, they do once all stations depart alike.
+    /// Whether blade and settings agree. Where a governor holds the rpm, they do once all stations depart
+    /// alike.
     pub settled: bool,
-    /// Where a governor sets the pitch: by how much all solved stations depart from their best angle, weighted over the points
-    /// that count, degrees; no twist changes that.
+    /// Where a governor sets the pitch: by how much all solved stations depart from their best angle,
+    /// weighted over the points that count, degrees; no twist changes that.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub governor_departure_deg: Option<f64>,
     /// Passes between blade and settings.

@@ -17,7 +17,8 @@ pub struct Strength {
     pub mass: Mass,
     /// What the blade was judged at, in order: flight points, standing start, overspeed.
     pub cases: Vec<CaseResult>,
-    /// Stress and margin at the edge of the hub and at the stations, each under the case that is worst there.
+    /// Stress and margin at the edge of the hub and at the stations, each under the case that is worst
+    /// there.
     pub stations: Vec<StressStation>,
     /// Whether blade and hub hold, and what was not judged.
     pub verdict: Verdict,
@@ -25,7 +26,8 @@ pub struct Strength {
     pub governing: Option<Governing>,
     /// Natural frequencies and what they meet.
     pub vibration: Vibration,
-    /// How far the blade turns under its load at each flight point that has an answer, and what that does to it.
+    /// How far the blade turns under its load at each flight point that has an answer, and what that does to
+    /// it.
     pub running: Vec<RunningTwist>,
     /// Bolts and boss, where the job has a hub.
     pub hub: Option<HubResult>,
@@ -126,9 +128,11 @@ pub struct CaseFigures {
     pub torque_n_m: f64,
     /// Centrifugal tension of one blade at the edge of the hub, N.
     pub root_tension_n: f64,
-    /// Bending moment of one blade at the edge of the hub forward, N m, after relief by rake and by deflection.
+    /// Bending moment of one blade at the edge of the hub forward, N m, after relief by rake and by
+    /// deflection.
     pub root_forward_n_m: f64,
-    /// Bending moment of one blade at the edge of the hub against the turning, N m, after relief by deflection.
+    /// Bending moment of one blade at the edge of the hub against the turning, N m, after relief by
+    /// deflection.
     pub root_against_n_m: f64,
     /// The same forward of a blade that did not give, relieved by rake alone, N m.
     pub rigid_forward_n_m: f64,
@@ -213,8 +217,9 @@ pub struct StressStation {
     pub kind: Option<StressKind>,
     /// Least margin: limit over stress, less 1.
     pub margin: Option<f64>,
-    /// Thickness that is missing here, m, rounded up to a tenth of a millimetre, so that every margin comes to nothing with all that is missing elsewhere, the blade's own weight
-    /// and stiffness taken into account, the air's load as it is; none where nothing is missing or twice the thickness does not do.
+    /// Thickness that is missing here, m, rounded up to a tenth of a millimetre, so that every margin comes
+    /// to nothing with all that is missing elsewhere, the blade's own weight and stiffness taken into
+    /// account, the air's load as it is; none where nothing is missing or twice the thickness does not do.
     pub thicker_m: Option<f64>,
 }
 
@@ -237,7 +242,8 @@ pub struct Governing {
     pub reason: String,
     /// Limit over stress, less 1; below zero the blade is over the limit.
     pub margin: f64,
-    /// In words: what holds as far as it was judged, or what would restore the margin; margins are limit over stress, less 1.
+    /// In words: what holds as far as it was judged, or what would restore the margin; margins are limit
+    /// over stress, less 1.
     pub sentence: String,
 }
 
@@ -368,7 +374,8 @@ pub struct HubResult {
     pub bearing_limit_pa: f64,
     /// Greatest pull of a blade on the boss, N.
     pub pull_n: f64,
-    /// That pull over the boss's section through the axis, holes taken out, Pa; none for other than one or two blades.
+    /// That pull over the boss's section through the axis, holes taken out, Pa; none for other than one or
+    /// two blades.
     pub boss_tension_pa: Option<f64>,
     /// Most tension, Pa.
     pub boss_limit_pa: f64,
@@ -378,10 +385,12 @@ pub struct HubResult {
     pub clamp_limit_pa: f64,
     /// Torque per nut that reaches this pressure, N m.
     pub most_bolt_torque_n_m: f64,
-    /// Torque that friction of one plate carries over the greatest torque; none where no bolt torque is given.
+    /// Torque that friction of one plate carries over the greatest torque; none where no bolt torque is
+    /// given.
     pub friction_share: Option<f64>,
     /// How much farther the holes reach than the boss can hold, m; none where they fit.
     pub past_boss_m: Option<f64>,
-    /// Least margin of those above that apply: limit over stress, less 1; where the holes do not fit, the boss's radius over the one they need, less 1, too.
+    /// Least margin of those above that apply: limit over stress, less 1; where the holes do not fit, the
+    /// boss's radius over the one they need, less 1, too.
     pub margin: f64,
 }

@@ -32,7 +32,8 @@ pub struct Verdict {
 }
 
 impl Verdict {
-    /// What must be said on every sheet that the blade is made from; `None` for one that holds with everything judged.
+    /// What must be said on every sheet that the blade is made from; `None` for one that holds with
+    /// everything judged.
     #[must_use]
     pub fn warning(&self) -> Option<String> {
         match self.finding {

@@ -1,12 +1,14 @@
 //! One element of the blade in balance: the inflow angle at which blade forces and momentum agree.
 //!
-//! With `W sin φ = V + u`, `W cos φ = Ω r − v`, `α = β − φ`, `cn = cl cos φ − cd sin φ`, `ct = cl sin φ + cd cos φ` and
-//! `σ = B c/(2π r)`, momentum with the factor F of tip and hub and drag included in both equations is
-//! `dT/dr = 4π r ρ F |V + u| u`, `dQ/dr = 4π r² ρ F |V + u| v`. Eliminating W leaves one residual in φ without a singular
-//! denominator (the idea of S. A. Ning, Wind Energy 17(9), 2014, and of his 2021 form for the static case):
+//! With `W sin φ = V + u`, `W cos φ = Ω r − v`, `α = β − φ`, `cn = cl cos φ − cd sin φ`, `ct = cl sin φ + cd
+//! cos φ` and `σ = B c/(2π r)`, momentum with the factor F of tip and hub and drag included in both equations
+//! is `dT/dr = 4π r ρ F |V + u| u`, `dQ/dr = 4π r² ρ F |V + u| v`. Eliminating W leaves one residual in φ
+//! without a singular denominator (the idea of S. A. Ning, Wind Energy 17(9), 2014, and of his 2021 form for
+//! the static case):
 //!
-//! `R(φ) = Ω r N − V M` (here over `hypot(V, Ω r)`), `M = 4 F |sin φ| cos φ + σ ct`, `N = 4 F sin φ |sin φ| − σ cn`, or in the windmill brake state
-//! (M. L. Buhl, NREL/TP-500-36834, 2005) `N = 4 F sin φ [(5/3 − F) sin φ + sqrt(−σ cn/2 − F (4/3 − F) sin² φ)]`.
+//! `R(φ) = Ω r N − V M` (here over `hypot(V, Ω r)`), `M = 4 F |sin φ| cos φ + σ ct`, `N = 4 F sin φ |sin φ| −
+//! σ cn`, or in the windmill brake state (M. L. Buhl, NREL/TP-500-36834, 2005) `N = 4 F sin φ [(5/3 − F) sin
+//! φ + sqrt(−σ cn/2 − F (4/3 − F) sin² φ)]`.
 //!
 //! Where the residual has several roots, the one of least `|α|` counts: it is found by marching outward from
 //! α = 0 and needs no history.
@@ -130,11 +132,13 @@ const NEAR_ZERO_RAD: f64 = 1e-7;
 const HALVING_RAD: f64 = 0.02;
 /// March step, rad.
 const STEP_RAD: f64 = 0.5 * PI / 180.0;
-/// The most that the momentum terms of N (times sin 2φ) and of M rise or fall with φ, 1/rad: `4 F` and `4 F cos 2φ`, and what Prandtl's
-/// factor adds where it changes fastest, at `f = 0.8` of both ends; with Goldstein's the tests hold it to the fine scan too.
+/// The most that the momentum terms of N (times sin 2φ) and of M rise or fall with φ, 1/rad: `4 F` and `4 F
+/// cos 2φ`, and what Prandtl's factor adds where it changes fastest, at `f = 0.8` of both ends; with
+/// Goldstein's the tests hold it to the fine scan too.
 ///
-/// With the most that the section's part can rise they bound the march's steps. The windmill brake state may break that bound: a pair of
-/// roots that close together is then passed over, as by a fixed step. The tests count how often against a fine scan.
+/// With the most that the section's part can rise they bound the march's steps. The windmill brake state may
+/// break that bound: a pair of roots that close together is then passed over, as by a fixed step. The tests
+/// count how often against a fine scan.
 const STEEPEST_MOMENTUM: (f64, f64) = (5.1, 6.1);
 /// From this blade angle on lift without inflow is not below zero, rad; below it is looked up.
 const SURELY_POSITIVE_RAD: f64 = 0.15;
@@ -186,8 +190,9 @@ impl Element<'_> {
         Some(self.balanced(phi, lookups.get() + 1))
     }
 
-    /// The balance with the angle of attack (rad) kept, whatever blade angle that asks for: one root in (0, π/2), for the coefficients do not
-    /// change with the inflow. `None` at the ends of the blade and where so much lift cannot be carried.
+    /// The balance with the angle of attack (rad) kept, whatever blade angle that asks for: one root in (0,
+    /// π/2), for the coefficients do not change with the inflow. `None` at the ends of the blade and
+    /// where so much lift cannot be carried.
     #[must_use]
     pub fn balance_at(&self, alpha_rad: f64) -> Option<Balance> {
         if self.ends.bare() {
@@ -233,8 +238,8 @@ impl Element<'_> {
         Terms { sin, cos, loss, section, m, n, windmill_brake }
     }
 
-    /// Where to look, in order. Below the limit in the last case the only root above zero is a spurious one held by
-    /// drag swirl, and above it the flow is reversed.
+    /// Where to look, in order. Below the limit in the last case the only root above zero is a spurious one
+    /// held by drag swirl, and above it the flow is reversed.
     fn brackets(&self) -> ([(f64, f64); 3], usize) {
         const AHEAD: (f64, f64) = (NEAR_ZERO_RAD, FRAC_PI_2);
         const REVERSED: (f64, f64) = (-FRAC_PI_2, -NEAR_ZERO_RAD);
@@ -251,16 +256,17 @@ impl Element<'_> {
         }
     }
 
-    /// Whether lift without inflow is not below zero, so that the first place to look is the flow from ahead, without a look.
+    /// Whether lift without inflow is not below zero, so that the first place to look is the flow from ahead,
+    /// without a look.
     fn surely_ahead(&self) -> bool {
         (SURELY_POSITIVE_RAD..FRAC_PI_2).contains(&self.angle_rad)
     }
 
     /// The root of least `|α|` between two inflow angles.
     ///
-    /// Well between the stall angles lift rises steeply with α, so that at most one root lies on either side of α = 0 and
-    /// two looks tell. Towards stall, where drag rises faster than lift, roots may come in pairs: from there on the march
-    /// takes small steps.
+    /// Well between the stall angles lift rises steeply with α, so that at most one root lies on either side
+    /// of α = 0 and two looks tell. Towards stall, where drag rises faster than lift, roots may come in
+    /// pairs: from there on the march takes small steps.
     fn nearest_root(&self, lo: f64, hi: f64, flow: &Flow, residual: &impl Fn(f64) -> f64) -> Option<f64> {
         let start = self.angle_rad.clamp(lo, hi);
         let at_start = residual(start);
@@ -325,7 +331,8 @@ impl Element<'_> {
         value.abs() / self.steepest(phi, end, flow)
     }
 
-    /// The most that the residual over `hypot(V, Ω r)` rises or falls with φ between two inflow angles, 1/rad.
+    /// The most that the residual over `hypot(V, Ω r)` rises or falls with φ between two inflow angles,
+    /// 1/rad.
     fn steepest(&self, a: f64, b: f64, flow: &Flow) -> f64 {
         let most = a.abs().max(b.abs());
         let sin_2phi = if most < FRAC_PI_4 { (2.0 * most).sin() } else { 1.0 };

@@ -35,8 +35,8 @@ impl Ends {
         Self { tip, hub, exact: None }
     }
 
-    /// The same with Goldstein's factor at the tip, for a number of blades at `r/R`. It is not let above 1, as it would be beside
-    /// the axis of few blades at coarse pitch: it knows of no hub.
+    /// The same with Goldstein's factor at the tip, for a number of blades at `r/R`. It is not let above 1,
+    /// as it would be beside the axis of few blades at coarse pitch: it knows of no hub.
     #[must_use]
     pub fn exact_at_tip(self, blades: u32, fraction: f64) -> Self {
         Self { exact: Some(goldstein::Share::new(blades, fraction)), ..self }

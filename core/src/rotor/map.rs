@@ -30,7 +30,8 @@ pub struct DepartureMap {
     pub cells: Array2<MapCell>,
 }
 
-/// The best angle is worked out at every so many conditions and interpolated between: it changes slowly along a line.
+/// The best angle is worked out at every so many conditions and interpolated between: it changes slowly along
+/// a line.
 const BEST_EVERY: usize = 8;
 
 /// The map of a propeller along a line of conditions, at the given radii (m).

@@ -1,11 +1,11 @@
 //! Blade-element momentum: the propeller at one condition, by elements and at its stations.
 //!
-//! Method: annuli independent of one another (steady axial flow), each in the balance of [`element`]; integration by
-//! the midpoint rule on cosine-spaced elements between hub and tip, which never touches the ends, where the load is
-//! nothing by definition. A body behind slows the air at the disc: the blades meet `(1 − h) V` (H. Glauert, *Airplane
-//! Propellers*, 1935, on body interference, as an effective advance ratio; from memory), h being the job's blockage,
-//! the same over the disc. Choice: Reynolds and Mach number of an element are those of `hypot(V, Ω r)`, fixed during
-//! the solve.
+//! Method: annuli independent of one another (steady axial flow), each in the balance of [`element`];
+//! integration by the midpoint rule on cosine-spaced elements between hub and tip, which never touches the
+//! ends, where the load is nothing by definition. A body behind slows the air at the disc: the blades meet
+//! `(1 − h) V` (H. Glauert, *Airplane Propellers*, 1935, on body interference, as an effective advance ratio;
+//! from memory), h being the job's blockage, the same over the disc. Choice: Reynolds and Mach number of an
+//! element are those of `hypot(V, Ω r)`, fixed during the solve.
 
 pub mod element;
 pub mod loss;
@@ -210,7 +210,8 @@ impl Rotor {
         self.sum(&self.rings, at, |_, element| element.balance())
     }
 
-    /// How thrust and torque are spread over the elements, from hub to tip; elements without a balance are left out.
+    /// How thrust and torque are spread over the elements, from hub to tip; elements without a balance are
+    /// left out.
     #[must_use]
     pub fn spread(&self, at: &Condition) -> Vec<Graded> {
         let graded = |ring: &Ring| {
@@ -236,7 +237,8 @@ impl Rotor {
         self.sum(&self.rough_rings, at, |_, element| element.balance())
     }
 
-    /// The loads, equal to within rounding, found from those of a neighbouring condition, with less work; keeps what the next may need.
+    /// The loads, equal to within rounding, found from those of a neighbouring condition, with less work;
+    /// keeps what the next may need.
     #[must_use]
     pub fn loads_near(&self, at: &Condition, near: &mut Neighbour) -> Loads {
         self.sum_near(&self.rings, at, &mut near.all)

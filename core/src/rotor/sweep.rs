@@ -42,8 +42,8 @@ impl Coefficients {
 }
 
 impl Coefficients {
-    /// Efficiency of an actuator disc at this thrust and speed: `2/(1 + sqrt(1 + Tc))`, `Tc = 8 CT/(π J²)`. `None` at rest
-    /// or without thrust.
+    /// Efficiency of an actuator disc at this thrust and speed: `2/(1 + sqrt(1 + Tc))`, `Tc = 8 CT/(π J²)`.
+    /// `None` at rest or without thrust.
     ///
     /// # References
     /// W. J. M. Rankine 1865 and R. E. Froude 1889; H. Glauert, *Airplane Propellers*, 1935.
@@ -68,7 +68,8 @@ pub struct CurvePoint {
     pub coefficients: Coefficients,
 }
 
-/// The curves at constant rpm and air, at rest and then at `steps` equal steps of speed up to where the thrust is gone.
+/// The curves at constant rpm and air, at rest and then at `steps` equal steps of speed up to where the
+/// thrust is gone.
 #[must_use]
 pub fn coefficient_curves(rotor: &Rotor, at: &Condition, steps: u32) -> Vec<CurvePoint> {
     let end = thrustless_speed_m_s(rotor, at);
@@ -88,8 +89,8 @@ pub fn curve_point(rotor: &Rotor, at: &Condition, airspeed_m_s: f64) -> CurvePoi
     }
 }
 
-/// The speed (m/s) at which thrust is gone, by steps of a tenth in J with few elements, secant steps and, where these fail, Brent's
-/// method with all of them; at least J = 0.1, at most 6.
+/// The speed (m/s) at which thrust is gone, by steps of a tenth in J with few elements, secant steps and,
+/// where these fail, Brent's method with all of them; at least J = 0.1, at most 6.
 #[must_use]
 pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
     const STEP: f64 = 0.1;
@@ -113,7 +114,8 @@ pub fn thrustless_speed_m_s(rotor: &Rotor, at: &Condition) -> f64 {
 mod tests {
     use super::*;
 
-    /// Actuator disc, computed from the formula: (J 0.5, CT 0.05) 0.89745; (0.5, 0.10) 0.82618; (0.8, 0.10) 0.91645.
+    /// Actuator disc, computed from the formula: (J 0.5, CT 0.05) 0.89745; (0.5, 0.10) 0.82618; (0.8, 0.10)
+    /// 0.91645.
     #[test]
     fn the_actuator_disc_sets_the_limit() {
         for (advance_ratio, ct, expected) in

@@ -1,8 +1,9 @@
 //! Blades that differ from one another, in the flow that they share.
 //!
-//! The induced flow is that of the propeller of mean blades; each blade's forces are those of its own angle, chord and
-//! thickness in it. This is right to first order in the differences, and leaves out that a blade works a little in its
-//! own wake: the differences between the blades' loads come out rather too large than too small.
+//! The induced flow is that of the propeller of mean blades; each blade's forces are those of its own angle,
+//! chord and thickness in it. This is right to first order in the differences, and leaves out that a blade
+//! works a little in its own wake: the differences between the blades' loads come out rather too large than
+//! too small.
 
 use super::{Condition, Rotor};
 use crate::report::best_of;
@@ -21,8 +22,8 @@ pub struct BladeLoad {
 }
 
 impl Rotor {
-    /// The load of each of the blades (each given as a propeller of its own kind with this one's hub and diameter) in the
-    /// flow of this propeller. Elements without a balance carry none.
+    /// The load of each of the blades (each given as a propeller of its own kind with this one's hub and
+    /// diameter) in the flow of this propeller. Elements without a balance carry none.
     #[must_use]
     pub fn blade_loads(&self, blades: &[Self], at: &Condition) -> Vec<BladeLoad> {
         let mut loads = vec![BladeLoad::default(); blades.len()];
@@ -47,7 +48,8 @@ impl Rotor {
         loads
     }
 
-    /// Departure (degrees) of one of such blades at a radius, m; `None` where there is no balance or no best angle.
+    /// Departure (degrees) of one of such blades at a radius, m; `None` where there is no balance or no best
+    /// angle.
     #[must_use]
     pub fn departure_deg(&self, blade: &Self, radius_m: f64, at: &Condition) -> Option<f64> {
         let flow = self.element(&self.ring(radius_m), at).0.balance()?;

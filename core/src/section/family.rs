@@ -21,8 +21,8 @@ pub struct About {
     pub title: String,
     /// Where the polars come from.
     pub origin: String,
-    /// Angle of the flat face above the chord line by thickness ratio: (t/c, degrees). Empty when there is no
-    /// flat face.
+    /// Angle of the flat face above the chord line by thickness ratio: (t/c, degrees). Empty when there is
+    /// no flat face.
     pub face_angle_deg: Vec<(f64, f64)>,
     /// Korn factor: 0.87 for ordinary sections, 0.95 for modern ones.
     pub korn_factor: f64,
@@ -41,8 +41,8 @@ pub struct Landmarks {
     pub first: f64,
     /// Last row.
     pub last: f64,
-    /// The most that the rises of lift and drag coefficient with the angle add up to anywhere, with the coefficients
-    /// themselves, 1/rad.
+    /// The most that the rises of lift and drag coefficient with the angle add up to anywhere, with the
+    /// coefficients themselves, 1/rad.
     pub steepest: f64,
 }
 
@@ -110,7 +110,8 @@ impl Family {
         Ok(Self { about, bins: bins_of(&grid), grid, nodes, polars: entries, rows: rows_of(&order) })
     }
 
-    /// The same with all lift and all drag coefficients times a factor: what an error of the polars would make of them.
+    /// The same with all lift and all drag coefficients times a factor: what an error of the polars would
+    /// make of them.
     #[must_use]
     pub fn scaled(&self, lift: f64, drag: f64) -> Self {
         let nodes =

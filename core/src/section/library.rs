@@ -1,7 +1,7 @@
 //! The families that come with the program, packed from `airfoils/` at build time.
 //!
-//! A family may hold two sets of tables, for quiet air (amplification n = 9 at transition) and for disturbed air (n = 4); a job's
-//! `method.n_crit` takes the nearest set.
+//! A family may hold two sets of tables, for quiet air (amplification n = 9 at transition) and for disturbed
+//! air (n = 4); a job's `method.n_crit` takes the nearest set.
 
 use std::sync::{Arc, OnceLock};
 

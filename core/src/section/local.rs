@@ -54,14 +54,15 @@ const DELAY_FULL_RAD: f64 = 30.0 * DEG;
 /// Stall delay is gone from this angle on, rad.
 const DELAY_NONE_RAD: f64 = 50.0 * DEG;
 
-/// The most that the delay of stall adds to the rise for each 1 of its factor, 1/rad: potential lift less the section's is at
-/// most about 4, let in or faded out over at least 7 degrees, and rises itself by 2π.
+/// The most that the delay of stall adds to the rise for each 1 of its factor, 1/rad: potential lift less the
+/// section's is at most about 4, let in or faded out over at least 7 degrees, and rises itself by 2π.
 const DELAY_STEEPEST: f64 = 40.0;
 /// Lift coefficients that sections do not pass.
 const MOST_LIFT: f64 = 2.0;
 /// Growth of lift with the Mach number stops below this by Korn's relation.
 const FASTEST_IN_GROWTH: f64 = 0.9;
-/// The most that Lock's law rises with the lift coefficient, where it reaches [`MOST_DRAG_RISE`]: `0.1 · 80 e³`, `e = 0.35`.
+/// The most that Lock's law rises with the lift coefficient, where it reaches [`MOST_DRAG_RISE`]: `0.1 · 80
+/// e³`, `e = 0.35`.
 const LOCK_STEEPEST: f64 = 0.343;
 
 impl<'f> Local<'f> {
@@ -99,8 +100,9 @@ impl<'f> Local<'f> {
         &self.landmarks
     }
 
-    /// The most that the rises of lift and drag coefficient with the angle add up to, with the coefficients themselves, 1/rad:
-    /// the tables' own, and what compressibility and the delay of stall can make of it.
+    /// The most that the rises of lift and drag coefficient with the angle add up to, with the coefficients
+    /// themselves, 1/rad: the tables' own, and what compressibility and the delay of stall can make of
+    /// it.
     #[must_use]
     pub fn steepest(&self) -> f64 {
         let table = self.landmarks.steepest;

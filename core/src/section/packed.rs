@@ -1,7 +1,8 @@
 //! The compact form of the section tables: `build.rs` writes it, `library` reads it.
 //!
-//! Figures are whole numbers at the precision of the tables (angles in 0.01°, lift in 1e-4, drag in 1e-5), one long column of each for a
-//! family, kept as second differences: curves are smooth, so that these are small and compress well.
+//! Figures are whole numbers at the precision of the tables (angles in 0.01°, lift in 1e-4, drag in 1e-5),
+//! one long column of each for a family, kept as second differences: curves are smooth, so that these are
+//! small and compress well.
 
 use serde::{Deserialize, Serialize};
 

@@ -1,9 +1,11 @@
 //! Least induced loss for a given thrust or power.
 //!
-//! Method: C. N. Adkins and R. H. Liebeck, *Design of Optimum Propellers*, J. Propulsion and Power 10(5), 1994. The displacement velocity ζ (over the airspeed)
-//! is the same at every radius. With `λ = V/(Ω R)`, `ξ = r/R`, `x = ξ/λ`, `ε = cd/cl`: `tan φt = λ (1 + ζ/2)`, `tan φ = tan φt/ξ`, `F = (2/π) acos e^−f`,
+//! Method: C. N. Adkins and R. H. Liebeck, *Design of Optimum Propellers*, J. Propulsion and Power 10(5),
+//! 1994. The displacement velocity ζ (over the airspeed) is the same at every radius. With `λ = V/(Ω R)`, `ξ
+//! = r/R`, `x = ξ/λ`, `ε = cd/cl`: `tan φt = λ (1 + ζ/2)`, `tan φ = tan φt/ξ`, `F = (2/π) acos e^−f`,
 //! `f = B/2 (1 − ξ)/sin φt`, `G = F x cos φ sin φ`. Without hub loss; not for rest. Where the job asks for
-//! Goldstein's loss, F is his at the pitch `λ = tan φt` of the wake (A. Betz and S. Goldstein: the circulation of least induced loss).
+//! Goldstein's loss, F is his at the pitch `λ = tan φt` of the wake (A. Betz and S. Goldstein: the
+//! circulation of least induced loss).
 
 use std::f64::consts::{FRAC_2_PI, PI};
 

@@ -24,8 +24,9 @@ pub enum PitchBy {
 /// Most pitches or diameters.
 pub const MOST_CHART_STEPS: usize = 200;
 
-/// The chart at a flight point over geometric pitches at 0.75 R and diameters, m. Chords go with the diameter, thickness ratios stay.
-/// Limits of rpm and tip Mach number are judged at this flight point alone; a search judges them at all that count.
+/// The chart at a flight point over geometric pitches at 0.75 R and diameters, m. Chords go with the
+/// diameter, thickness ratios stay. Limits of rpm and tip Mach number are judged at this flight point alone;
+/// a search judges them at all that count.
 ///
 /// # Errors
 /// No such flight point; too many steps.

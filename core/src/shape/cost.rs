@@ -1,7 +1,8 @@
 //! What an error of the blade costs: slopes by central differences through the whole fit, station by station.
 //!
-//! Every difference is a blade of its own, matched anew with engine and aircraft. The bands are linear in the errors: right for small ones.
-//! The polars are doubted as a whole: all lift, and all drag coefficients, too great or too small by the same share.
+//! Every difference is a blade of its own, matched anew with engine and aircraft. The bands are linear in the
+//! errors: right for small ones. The polars are doubted as a whole: all lift, and all drag coefficients, too
+//! great or too small by the same share.
 
 use std::sync::Arc;
 
@@ -27,7 +28,8 @@ enum Off {
     Thickness,
 }
 
-/// What errors cost at every flight point of the job, and standing and at top speed where engine and aircraft tell.
+/// What errors cost at every flight point of the job, and standing and at top speed where engine and aircraft
+/// tell.
 ///
 /// # Errors
 /// A tolerance below zero or not a number; a changed blade that the job's check refuses.

@@ -7,8 +7,8 @@ use crate::result::{Brief, Limit, Margin};
 use crate::rig::Rig;
 use crate::wood::{BladeBeam, least_margin_like};
 
-/// How far the drawn blade keeps the limits of the job's wishes and, in level flight, those of its engine: one margin for
-/// each limit and flight point.
+/// How far the drawn blade keeps the limits of the job's wishes and, in level flight, those of its engine:
+/// one margin for each limit and flight point.
 #[must_use]
 pub fn kept(rig: &Rig) -> Vec<Margin> {
     let none = Limits::default();
@@ -33,8 +33,8 @@ pub(super) fn beam(rig: &Rig, limits: &Limits) -> Option<BladeBeam> {
     BladeBeam::new(rig).ok()
 }
 
-/// Margins of a propeller with its figures at the flight points looked at; `standing` where that limit is set. How many there
-/// are depends on the job and its limits alone.
+/// Margins of a propeller with its figures at the flight points looked at; `standing` where that limit is
+/// set. How many there are depends on the job and its limits alone.
 pub(super) fn margins(
     rig: &Rig,
     limits: &Limits,
@@ -104,7 +104,8 @@ fn at_least(limit: Limit, b: &Brief, least: f64) -> Margin {
     Margin { limit, flight_point: Some(b.name.clone()), found: b.rpm, allowed: Some(least), share }
 }
 
-/// Width and depth of the box round every station: chord line and thickness laid across one another, on the safe side.
+/// Width and depth of the box round every station: chord line and thickness laid across one another, on the
+/// safe side.
 fn blank_m(rig: &Rig) -> (f64, f64) {
     let blade = &rig.rotor.blade;
     blade.station_radii_m().map(|r| blade.cut(r)).fold((0.0, 0.0), |(width, depth), cut| {

@@ -1,8 +1,9 @@
 //! From a job to a better blade: a variant beside the drawn one, never over it.
 //!
-//! Angles alone at best incidence ([`twist()`]); chord and angle of least induced loss ([`least_loss()`]); what an error costs ([`error_costs`]); figures over pitch and diameter
-//! ([`pitch_diameter`]). Strength is not judged here: a blade that comes out
-//! thinner or narrower than a proven one needs its own check of strength.
+//! Angles alone at best incidence ([`twist()`]); chord and angle of least induced loss ([`least_loss()`]);
+//! what an error costs ([`error_costs`]); figures over pitch and diameter ([`pitch_diameter`]). Strength is
+//! not judged here: a blade that comes out thinner or narrower than a proven one needs its own check of
+//! strength.
 
 pub mod adkins_liebeck;
 mod brief;

@@ -1,11 +1,15 @@
-//! Best-incidence twist: for the drawn chords, the angles that put every station at its own angle of best lift-to-drag.
+//! Best-incidence twist: for the drawn chords, the angles that put every station at its own angle of best
+//! lift-to-drag.
 //!
-//! At a condition with its own induced flow each station's balance is solved with lift and drag held at the best angle `α*` of its section at its Reynolds
-//! and Mach number, and `β = φ + α*`. The new blade meets the flight point's setting at another rpm, so blade and setting take turns until the angles rest.
-//! Along several flight points each station takes the angle of least `Σ w (α − α*)²` or of least weighted loss of lift-to-drag, which lies between
-//! its best angles. A governor gives rpm and power both, which angles at their best cannot meet as well: there the twist is the one with which all
-//! stations depart alike, and that common departure is the governor's. Where no angle carries the lift, and inside 0.2 R and outside 0.95 R also where
-//! the factor of tip and hub leaves little load, the geometric pitch of the nearest solved station is held, so that the blade can be carved.
+//! At a condition with its own induced flow each station's balance is solved with lift and drag held at the
+//! best angle `α*` of its section at its Reynolds and Mach number, and `β = φ + α*`. The new blade meets the
+//! flight point's setting at another rpm, so blade and setting take turns until the angles rest.
+//! Along several flight points each station takes the angle of least `Σ w (α − α*)²` or of least weighted
+//! loss of lift-to-drag, which lies between its best angles. A governor gives rpm and power both, which
+//! angles at their best cannot meet as well: there the twist is the one with which all stations depart alike,
+//! and that common departure is the governor's. Where no angle carries the lift, and inside 0.2 R and outside
+//! 0.95 R also where the factor of tip and hub leaves little load, the geometric pitch of the nearest solved
+//! station is held, so that the blade can be carved.
 
 use std::ops::RangeInclusive;
 
@@ -139,7 +143,8 @@ fn loaded(rig: &Rig, radius_m: f64, balance: &Balance) -> bool {
     WORKING.contains(&(radius_m / rig.rotor.blade.radius_m)) || balance.loss > LEAST_FACTOR
 }
 
-/// The drawn angle of least weighted departure at a radius, rad; `None` where no point that counts can be carried.
+/// The drawn angle of least weighted departure at a radius, rad; `None` where no point that counts can be
+/// carried.
 fn solved(rig: &Rig, radius_m: f64, counted: &[Counted], by: TwistBy) -> Option<f64> {
     let ring = rig.rotor.ring(radius_m);
     let mut wanted: Vec<Wanted> = Vec::new();
@@ -164,8 +169,8 @@ fn solved(rig: &Rig, radius_m: f64, counted: &[Counted], by: TwistBy) -> Option<
     Some(if high - low < AT_REST_RAD { low } else { least(&wanted, (low, high), by) })
 }
 
-/// The drawn angles with which, at the governed rpm, all stations depart alike from their best, weighted over the points that count; `None` where
-/// there is no balance to judge by.
+/// The drawn angles with which, at the governed rpm, all stations depart alike from their best, weighted over
+/// the points that count; `None` where there is no balance to judge by.
 fn alike(rig: &Rig, counted: &[Counted]) -> Vec<Option<f64>> {
     let blade = &rig.rotor.blade;
     let departure = |radius_m: f64| {

@@ -1,7 +1,8 @@
-//! A slender beam clamped at its root, by plain arrays: tension, bending, deflection, twist, natural frequencies.
+//! A slender beam clamped at its root, by plain arrays: tension, bending, deflection, twist, natural
+//! frequencies.
 //!
-//! Every function takes radii from root to tip (m, rising, at least two, measured from the axis of rotation) and figures per metre of radius at
-//! those radii, taken as straight lines between them.
+//! Every function takes radii from root to tip (m, rising, at least two, measured from the axis of rotation)
+//! and figures per metre of radius at those radii, taken as straight lines between them.
 
 mod banded;
 mod bending;

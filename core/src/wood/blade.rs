@@ -59,7 +59,8 @@ pub struct BladeBeam {
     /// Radii of all stations, m, and their sections' shapes.
     stations_m: Vec<f64>,
     drawn: Vec<Drawn>,
-    /// What is judged: the edge of the hub, where no station stands there, then the stations outside the hub.
+    /// What is judged: the edge of the hub, where no station stands there, then the stations outside the
+    /// hub.
     pub places: Vec<Place>,
 }
 
@@ -73,7 +74,8 @@ impl BladeBeam {
         Self::of(rig, shapes(&rig.job), material(&wood)?)
     }
 
-    /// The blade of another rig of the same wood whose stations have the same sections and thickness ratios: their outlines are not measured again.
+    /// The blade of another rig of the same wood whose stations have the same sections and thickness ratios:
+    /// their outlines are not measured again.
     pub(super) fn like(&self, rig: &Rig) -> Result<Self, WoodError> {
         Self::of(rig, self.drawn.clone(), self.material.clone())
     }
@@ -100,7 +102,8 @@ impl BladeBeam {
         beam.with_thickness(&thickness).ok_or(WoodError::Stations)
     }
 
-    /// The same blade with other thickness ratios of its stations; `None` unless they are as many finite numbers.
+    /// The same blade with other thickness ratios of its stations; `None` unless they are as many finite
+    /// numbers.
     #[must_use]
     pub fn with_thickness(&self, ratios: &[f64]) -> Option<Self> {
         let thickness = Curve::new(self.stations_m.clone(), ratios.to_vec())?;

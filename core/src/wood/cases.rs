@@ -1,4 +1,5 @@
-//! The conditions the blade is judged at: every flight point, a standing start at full throttle, and an overspeed.
+//! The conditions the blade is judged at: every flight point, a standing start at full throttle, and an
+//! overspeed.
 
 use crate::air::Air;
 use crate::fit;
@@ -54,7 +55,8 @@ fn answer(rig: &Rig, point: &FlightPoint, air: Air) -> Result<(Condition, bool),
     })
 }
 
-/// A standing start in the air of the first flight point, where the job has an engine and no such flight point.
+/// A standing start in the air of the first flight point, where the job has an engine and no such flight
+/// point.
 fn standing(rig: &Rig) -> Option<Case> {
     let full_at_rest =
         |p: &FlightPoint| p.airspeed_m_s == Some(0.0) && p.setting == (Setting::FullThrottle {});
@@ -66,8 +68,9 @@ fn standing(rig: &Rig) -> Option<Case> {
     Some(case(rig, &point, "Standing, full throttle".into(), CaseKind::Standing, None))
 }
 
-/// The case of the highest rpm, turned faster: the factor times the highest rpm of any case or of the engine's limit, at the least airspeed (a dive) at
-/// which the propeller takes no more power than in any case.
+/// The case of the highest rpm, turned faster: the factor times the highest rpm of any case or of the
+/// engine's limit, at the least airspeed (a dive) at which the propeller takes no more power than in any
+/// case.
 fn overspeeding(rig: &Rig, cases: &[Case], factor: f64) -> Option<Case> {
     let answered = cases.iter().filter_map(|c| Some((c, c.at.as_ref().ok()?)));
     let (fastest, at) = answered.max_by(|a, b| a.1.rotation_rad_s.total_cmp(&b.1.rotation_rad_s))?;
@@ -85,7 +88,8 @@ fn overspeeding(rig: &Rig, cases: &[Case], factor: f64) -> Option<Case> {
     })
 }
 
-/// The least airspeed, from that given on, at which what is spare is not above zero; the highest looked at where there is none.
+/// The least airspeed, from that given on, at which what is spare is not above zero; the highest looked at
+/// where there is none.
 fn dived(at: &Condition, spare: impl Fn(&Condition) -> f64) -> Condition {
     let with = |airspeed_m_s: f64| Condition { airspeed_m_s, ..*at };
     let (mut low, mut high) = (at.airspeed_m_s, at.airspeed_m_s);

@@ -1,7 +1,8 @@
 //! Boss and bolts.
 //!
-//! Common practice for a flat wooden boss between two plates: the bolts' clamping carries the torque by friction; the bolts are looked at as if there were
-//! none. Of the boss the section through the axis is looked at, where one piece of wood carries one blade's pull to the other.
+//! Common practice for a flat wooden boss between two plates: the bolts' clamping carries the torque by
+//! friction; the bolts are looked at as if there were none. Of the boss the section through the axis is
+//! looked at, where one piece of wood carries one blade's pull to the other.
 
 use std::f64::consts::PI;
 
@@ -14,7 +15,8 @@ use crate::result::HubResult;
 const NUT_FACTOR: f64 = 0.2;
 /// Friction of wood on a dry metal plate (from memory).
 const FRICTION: f64 = 0.25;
-/// Coefficient of variation of the strength across the grain (Wood Handbook, FPL-GTR-190, Table 5-6; from memory).
+/// Coefficient of variation of the strength across the grain (Wood Handbook, FPL-GTR-190, Table 5-6; from
+/// memory).
 const SCATTER_ACROSS: f64 = 0.28;
 
 /// The hub under the greatest torque (N m) and the greatest pull of a blade (N) of any case.
@@ -60,8 +62,8 @@ pub(super) fn hub(
     }
 }
 
-/// Pull over the section through the axis with the bore and two bolt holes out of it; `None` for more than two blades, whose boss is built up otherwise,
-/// and where the holes leave nothing.
+/// Pull over the section through the axis with the bore and two bolt holes out of it; `None` for more than
+/// two blades, whose boss is built up otherwise, and where the holes leave nothing.
 fn boss_tension_pa(beam: &BladeBeam, hub: &Hub, boss_diameter_m: f64, pull_n: f64) -> Option<f64> {
     let holes = hub.bore_m + if hub.bolts > 1 { 2.0 * hub.bolt_diameter_m } else { 0.0 };
     let area_m2 = hub.thickness_m * (boss_diameter_m - holes);

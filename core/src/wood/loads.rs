@@ -1,4 +1,5 @@
-//! What the air, the rotation and the sections' places do to one blade: forces and moments per metre of radius.
+//! What the air, the rotation and the sections' places do to one blade: forces and moments per metre of
+//! radius.
 
 use std::f64::consts::{FRAC_PI_2, PI};
 
@@ -6,7 +7,8 @@ use super::BladeBeam;
 use super::beam::{at as at_radius, bending_n_m, outboard, tension_n};
 use crate::rotor::{Condition, Graded, Rotor};
 
-/// Place along the chord where the air's force acts before the stall, from the leading edge: thin aerofoil theory, the section's own moment apart.
+/// Place along the chord where the air's force acts before the stall, from the leading edge: thin aerofoil
+/// theory, the section's own moment apart.
 const QUARTER: f64 = 0.25;
 /// Angles past the stall over which the force moves back to where it acts on a flat plate, rad.
 const BREAKING_RAD: f64 = 5.0 * PI / 180.0;
@@ -105,8 +107,9 @@ impl Air {
 }
 
 impl BladeBeam {
-    /// Centrifugal twisting moment per metre at a radius by index, with the blades turned by `turn_rad` besides: `−ρ Ω² ∫ u w dA`, u in the plane of
-    /// rotation and w along the axis (mass swings into the plane of rotation; standard, from memory).
+    /// Centrifugal twisting moment per metre at a radius by index, with the blades turned by `turn_rad`
+    /// besides: `−ρ Ω² ∫ u w dA`, u in the plane of rotation and w along the axis (mass swings into the
+    /// plane of rotation; standard, from memory).
     pub(super) fn centrifugal_twisting_n(&self, i: usize, turn_rad: f64, rotation_rad_s: f64) -> f64 {
         let (s, c) = (2.0 * (self.angles_rad[i] + turn_rad)).sin_cos();
         let section = &self.sections[i];
@@ -122,7 +125,8 @@ impl BladeBeam {
         self.material.density_kg_m3 * rotation_rad_s.powi(2) * growth
     }
 
-    /// The air's twisting moment per metre about the centroid of a section under forces forward and against the turning.
+    /// The air's twisting moment per metre about the centroid of a section under forces forward and against
+    /// the turning.
     fn air_twisting_n(&self, g: &Graded, turn_rad: f64, [forward, against]: [f64; 2]) -> f64 {
         let i = self.radii_m.partition_point(|r| *r < g.radius_m).min(self.radii_m.len() - 1);
         let (s, c) = (self.angles_rad[i] + turn_rad).sin_cos();
@@ -141,8 +145,8 @@ fn broken(g: &Graded) -> f64 {
     (past / BREAKING_RAD).clamp(0.0, 1.0)
 }
 
-/// Where the force acts on a flat plate past the stall, in chords from the leading edge: `0.5 − 0.175 (1 − |α|/90°)`
-/// (C. Lindenburg, ECN-C--03-025, 2003; from memory).
+/// Where the force acts on a flat plate past the stall, in chords from the leading edge: `0.5 − 0.175 (1 −
+/// |α|/90°)` (C. Lindenburg, ECN-C--03-025, 2003; from memory).
 fn plate_centre(alpha_rad: f64) -> f64 {
     0.5 - 0.175 * (1.0 - (alpha_rad.abs() / FRAC_PI_2).min(1.0))
 }

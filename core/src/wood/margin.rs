@@ -5,7 +5,8 @@ use super::judged::Loaded;
 use super::{BladeBeam, WoodError};
 use crate::rig::Rig;
 
-/// The least margin anywhere on a job's blade over all cases, limit over stress less 1, with the case; `None` where no case has an answer.
+/// The least margin anywhere on a job's blade over all cases, limit over stress less 1, with the case; `None`
+/// where no case has an answer.
 ///
 /// # Errors
 /// A species that is not known.

@@ -30,8 +30,9 @@ pub struct Material {
 
 /// How much of a strength may be asked: `mean (1 − 1.645 scatter) lasting / safety`, or the user's own limit.
 ///
-/// In compression along the grain the strength of wood is its proportional limit, below which no fibres buckle and repeated load takes nothing
-/// (ANC-18, *Design of Wood Aircraft Structures*, section 2.1: 0.75 of the crushing strength of hardwoods, 0.80 of softwoods).
+/// In compression along the grain the strength of wood is its proportional limit, below which no fibres
+/// buckle and repeated load takes nothing (ANC-18, *Design of Wood Aircraft Structures*, section 2.1: 0.75 of
+/// the crushing strength of hardwoods, 0.80 of softwoods).
 #[derive(Clone, Debug, PartialEq)]
 pub struct Strength {
     /// Mean strength of the material at its moisture, Pa.
@@ -50,16 +51,17 @@ struct Taken {
     safety: f64,
 }
 
-/// Coefficients of variation of clear wood: bending, compression along, shear, compression across (Wood Handbook, FPL-GTR-190, Table 5-6;
-/// from memory).
+/// Coefficients of variation of clear wood: bending, compression along, shear, compression across (Wood
+/// Handbook, FPL-GTR-190, Table 5-6; from memory).
 const WOOD_SCATTER: [f64; 4] = [0.16, 0.18, 0.14, 0.28];
-/// Share of the static strength that clear straight-grained wood keeps over tens of millions of loadings (Wood Handbook,
-/// FPL-GTR-190, chapter 5, fatigue; from memory).
+/// Share of the static strength that clear straight-grained wood keeps over tens of millions of loadings
+/// (Wood Handbook, FPL-GTR-190, chapter 5, fatigue; from memory).
 const WOOD_LASTS: f64 = 0.5;
 /// Moisture at which a wood's density is given, percent.
 const USUAL_MOISTURE: f64 = 12.0;
 
-/// Scatter of the four strengths and what lasts, by kind; for other materials than wood from memory, on the low side.
+/// Scatter of the four strengths and what lasts, by kind; for other materials than wood from memory, on the
+/// low side.
 fn habits(kind: Kind) -> ([f64; 4], f64) {
     match kind {
         Kind::Hardwood | Kind::Softwood => (WOOD_SCATTER, WOOD_LASTS),

@@ -1,9 +1,11 @@
 //! How moisture changes the strength and stiffness of wood.
 
-/// A property of clear wood at a moisture content (percent): `P = P12 (P12/Pg)^((12 − M)/(Mp − 12))`, from its values at 12 % and
-/// green, `meets_percent` being the moisture at which drying begins to tell; above that it is the green value.
+/// A property of clear wood at a moisture content (percent): `P = P12 (P12/Pg)^((12 − M)/(Mp − 12))`, from
+/// its values at 12 % and green, `meets_percent` being the moisture at which drying begins to tell; above
+/// that it is the green value.
 ///
-/// Source: USDA Wood Handbook, FPL-GTR-190 (2010), chapter 5, equation 5-3; valid from oven-dry to green, near 20 °C.
+/// Source: USDA Wood Handbook, FPL-GTR-190 (2010), chapter 5, equation 5-3; valid from oven-dry to green,
+/// near 20 °C.
 ///
 /// ```
 /// use spokeshave::wood::at_moisture;

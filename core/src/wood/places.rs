@@ -29,7 +29,8 @@ pub enum Doubt {
     Stretched,
 }
 
-/// The edge of the hub, where no station stands there, then the stations outside the hub; thickness is left to be filled in.
+/// The edge of the hub, where no station stands there, then the stations outside the hub; thickness is left
+/// to be filled in.
 pub(super) fn places(radii_m: &[f64], stations_m: &[f64], drawn: &[Drawn]) -> Vec<Place> {
     let place = |index: usize, station: Option<usize>, of: usize| Place {
         index,

@@ -42,8 +42,9 @@ impl<'m> Nearest<'m> {
     }
 }
 
-/// Thickness that is missing at each station, m, nothing where none is, so that every place is within its limits under the air's load as it is: the
-/// blade's weight, its pull and the relief by its bending follow the thickness. `None` where no more than twice the thickness does.
+/// Thickness that is missing at each station, m, nothing where none is, so that every place is within its
+/// limits under the air's load as it is: the blade's weight, its pull and the relief by its bending follow
+/// the thickness. `None` where no more than twice the thickness does.
 pub(super) fn remedy(rig: &Rig, beam: &BladeBeam, cases: &[&Loaded]) -> Option<Vec<f64>> {
     let stations = &rig.job.propeller.stations;
     let drawn: Vec<f64> = stations.iter().map(|s| s.thickness_ratio).collect();

@@ -1,15 +1,16 @@
-//! Properties of a section as a beam sees it: area, centroid, second moments, principal axes, torsion constant, extreme fibres.
+//! Properties of a section as a beam sees it: area, centroid, second moments, principal axes, torsion
+//! constant, extreme fibres.
 //!
-//! Area and moments are those of the outline's polygon, by the usual boundary sums. Axes: ξ along the chord line from leading to trailing edge, η
-//! square to it towards the back, through the centroid.
+//! Area and moments are those of the outline's polygon, by the usual boundary sums. Axes: ξ along the chord
+//! line from leading to trailing edge, η square to it towards the back, through the centroid.
 
 mod moment;
 mod torsion;
 
 use crate::section::outline::Outline;
 
-/// A section's shape, in chords `c` and thicknesses `t` (ratio), from which sections of any chord and about that thickness follow:
-/// `A = area c t`, `I = flat c t³`, and so on.
+/// A section's shape, in chords `c` and thicknesses `t` (ratio), from which sections of any chord and about
+/// that thickness follow: `A = area c t`, `I = flat c t³`, and so on.
 #[derive(Clone, Debug, PartialEq)]
 pub struct Shape {
     /// Area over `c t`.
@@ -67,7 +68,8 @@ impl Shape {
         }
     }
 
-    /// What is taken where no outline is known: a usual section, its extreme fibres at the corners of a box, on the safe side (from memory).
+    /// What is taken where no outline is known: a usual section, its extreme fibres at the corners of a box,
+    /// on the safe side (from memory).
     #[must_use]
     pub fn usual() -> Self {
         let (x, y) = (0.55, 0.55);
@@ -115,8 +117,8 @@ impl Section {
         }
     }
 
-    /// Least and greatest second moment, m⁴, and the angle (rad) from the chord line to the axis of the least, positive where it rises
-    /// towards the trailing edge.
+    /// Least and greatest second moment, m⁴, and the angle (rad) from the chord line to the axis of the
+    /// least, positive where it rises towards the trailing edge.
     #[must_use]
     pub fn principal(&self) -> (f64, f64, f64) {
         let (mean, half) = (0.5 * (self.flat_m4 + self.edge_m4), 0.5 * (self.edge_m4 - self.flat_m4));

@@ -1,12 +1,15 @@
 //! Materials that come with the program.
 //!
-//! Values at 12 % moisture: USDA Forest Products Laboratory, *Wood Handbook*, FPL-GTR-190 (2010), Table 5-3a. Green values: the same
-//! table, from memory but for white ash, sugar maple, white oak and black cherry. Moisture at which drying begins to tell: Table 5-13
-//! (white ash, yellow birch, Sitka spruce, Douglas-fir), 25 % for the others as the Handbook says. Ratio of the shear modulus along the
-//! blade to Young's modulus: mean of `GLR/EL` and `GLT/EL` of Table 5-1, from memory; for sweet birch and beech, which that table does not have, those of
-//! yellow birch. European beech: DIN 68364 (2003), from memory. Materials for small blades: usual data-sheet values, from memory.
+//! Values at 12 % moisture: USDA Forest Products Laboratory, *Wood Handbook*, FPL-GTR-190 (2010), Table 5-3a.
+//! Green values: the same table, from memory but for white ash, sugar maple, white oak and black cherry.
+//! Moisture at which drying begins to tell: Table 5-13 (white ash, yellow birch, Sitka spruce, Douglas-fir),
+//! 25 % for the others as the Handbook says. Ratio of the shear modulus along the blade to Young's modulus:
+//! mean of `GLR/EL` and `GLT/EL` of Table 5-1, from memory; for sweet birch and beech, which that table does
+//! not have, those of yellow birch. European beech: DIN 68364 (2003), from memory. Materials for small
+//! blades: usual data-sheet values, from memory.
 
-/// What sort of material it is: decides its scatter, what lasts under repeated load, and whether moisture tells.
+/// What sort of material it is: decides its scatter, what lasts under repeated load, and whether moisture
+/// tells.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
 pub enum Kind {
     /// Wood of a broad-leaved tree, grain along the blade.
@@ -28,7 +31,8 @@ pub struct Species {
     pub title: &'static str,
     /// Sort of material.
     pub kind: Kind,
-    /// Density at 12 % moisture, kg/m³; of wood `1120` times its specific gravity (oven-dry weight, volume at 12 %).
+    /// Density at 12 % moisture, kg/m³; of wood `1120` times its specific gravity (oven-dry weight, volume
+    /// at 12 %).
     pub density_kg_m3: f64,
     /// Bending strength (modulus of rupture) at 12 % and green, megapascal.
     pub bending_mpa: [f64; 2],
@@ -52,7 +56,8 @@ const HANDBOOK: &str = "USDA Wood Handbook (FPL-GTR-190, 2010), Table 5-3a";
 const GREEN_RECALLED: &str = "USDA Wood Handbook (FPL-GTR-190, 2010), Table 5-3a; green values from memory";
 const RECALLED: &str = "usual data-sheet values, from memory";
 
-/// A wood: specific gravity, then bending, modulus, compression along and across the grain, and shear, each at 12 % and green.
+/// A wood: specific gravity, then bending, modulus, compression along and across the grain, and shear, each
+/// at 12 % and green.
 #[allow(clippy::too_many_arguments)]
 const fn wood(
     name: &'static str,

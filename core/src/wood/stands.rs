@@ -4,8 +4,9 @@ use super::BladeBeam;
 use super::beam::Offset;
 
 impl BladeBeam {
-    /// Offsets of the centroids at the radii, m, forward and against the turning, the blades turned by `beyond_rad` besides the angles kept here. The
-    /// stacking line and what stands on it turn with the blade; the lean does not.
+    /// Offsets of the centroids at the radii, m, forward and against the turning, the blades turned by
+    /// `beyond_rad` besides the angles kept here. The stacking line and what stands on it turn with the
+    /// blade; the lean does not.
     pub(super) fn offsets_m(&self, beyond_rad: f64) -> [Vec<f64>; 2] {
         let turn = (self.turn_rad + beyond_rad).sin_cos();
         let all: Vec<[f64; 2]> =

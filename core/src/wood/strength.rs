@@ -64,7 +64,8 @@ impl Judged {
     }
 }
 
-/// Strength, weight and vibration of a job's blade; without a material of the job's the usual one is taken and said.
+/// Strength, weight and vibration of a job's blade; without a material of the job's the usual one is taken
+/// and said.
 ///
 /// # Errors
 /// A species that is not known.

@@ -55,8 +55,9 @@ impl Carried {
 
     /// Greatest stresses of a section of a chord (m) and thickness ratio.
     ///
-    /// Along the blade `σ = N/A − (a ξ + b η)` at every point of the rim, where a and b follow from both moments and the section's second moments, product
-    /// included (unsymmetric bending; S. Timoshenko, *Strength of Materials*; from memory). Shear `3/2 V/A + |T| t/J`: a rectangle's and a slender
+    /// Along the blade `σ = N/A − (a ξ + b η)` at every point of the rim, where a and b follow from both
+    /// moments and the section's second moments, product included (unsymmetric bending; S. Timoshenko,
+    /// *Strength of Materials*; from memory). Shear `3/2 V/A + |T| t/J`: a rectangle's and a slender
     /// section's, added as if they met.
     #[must_use]
     pub fn stresses(&self, shape: &Shape, chord_m: f64, thickness_ratio: f64) -> Stresses {

@@ -15,9 +15,11 @@ const PASSES: u32 = 20;
 /// Twists that agree, rad.
 const SETTLED_RAD: f64 = 0.01 * std::f64::consts::PI / 180.0;
 
-/// Twist under loads at the beam's radii, rad, coarser positive. `None` where the blade does not stand against it.
+/// Twist under loads at the beam's radii, rad, coarser positive. `None` where the blade does not stand
+/// against it.
 ///
-/// Centrifugal twisting moment, the air's moment about the centroid, what centroids beside a straight line add, and tension that straightens the drawn twist.
+/// Centrifugal twisting moment, the air's moment about the centroid, what centroids beside a straight line
+/// add, and tension that straightens the drawn twist.
 pub(super) fn twist_rad(beam: &BladeBeam, loads: &BladeLoads, turn_rad: f64) -> Option<Vec<f64>> {
     let figures = Bar::new(beam, loads.rotation_rad_s, turn_rad);
     let bar = figures.twisting(beam, loads.rotation_rad_s);
@@ -58,8 +60,9 @@ impl Bar {
     }
 }
 
-/// A flight point with the blade twisted by its load: twist, then load and setting of the twisted blade, then twist again, until they agree. `None`
-/// where the point has no answer (held at a limit rpm included) or the blade does not stand.
+/// A flight point with the blade twisted by its load: twist, then load and setting of the twisted blade, then
+/// twist again, until they agree. `None` where the point has no answer (held at a limit rpm included) or the
+/// blade does not stand.
 pub(super) fn running(rig: &Rig, beam: &BladeBeam, point: usize) -> Option<RunningTwist> {
     let drawn_at = rig.condition(point)?;
     let mut twist =
@@ -84,7 +87,8 @@ pub(super) fn running(rig: &Rig, beam: &BladeBeam, point: usize) -> Option<Runni
     })
 }
 
-/// How much of a change is taken: all of it first, then by Aitken's rule, so that load and twist that overshoot one another settle.
+/// How much of a change is taken: all of it first, then by Aitken's rule, so that load and twist that
+/// overshoot one another settle.
 struct Relax {
     share: f64,
     before: Option<Vec<f64>>,

@@ -7,7 +7,8 @@ use crate::job::PitchControl;
 use crate::result::{CaseResult, Finding, Governing, HubResult, Verdict};
 use crate::rig::Rig;
 
-/// Whether a job's blade and hub hold: the verdict of [`strength`](super::strength()) without the rest of the sheet.
+/// Whether a job's blade and hub hold: the verdict of [`strength`](super::strength()) without the rest of the
+/// sheet.
 ///
 /// # Errors
 /// A species that is not known.

@@ -18,8 +18,8 @@ const ENGINE_ORDERS: u32 = 2;
 /// Nearness at which an order is named (common practice keeps at least 10 % away).
 const NEAR: f64 = 0.10;
 
-/// Lines from rest to the fastest rotation, and the cases (name and rad/s) in which a mode comes near an order; the gear ratio is the engine's turns over
-/// the propeller's.
+/// Lines from rest to the fastest rotation, and the cases (name and rad/s) in which a mode comes near an
+/// order; the gear ratio is the engine's turns over the propeller's.
 pub(super) fn vibration(beam: &BladeBeam, cases: &[(String, f64)], gear_ratio: f64) -> Vibration {
     let fastest = cases.iter().map(|c| c.1).fold(0.0, f64::max);
     let speeds: Vec<f64> = (0..SPEEDS).map(|i| fastest * i as f64 / (SPEEDS - 1) as f64).collect();
@@ -101,7 +101,8 @@ fn at(line: &FrequencyLine, rpm: f64) -> f64 {
 }
 
 impl BladeBeam {
-    /// Bending stiffness out of the plane of rotation, in it, and between the two, N m², at the radii, turned by `turn_rad` besides the drawing.
+    /// Bending stiffness out of the plane of rotation, in it, and between the two, N m², at the radii, turned
+    /// by `turn_rad` besides the drawing.
     pub(super) fn stiffness(&self, turn_rad: f64) -> [Vec<f64>; 3] {
         let turned = |i: usize| -> [f64; 3] {
             let (s, c) = (self.angles_rad[i] + turn_rad).sin_cos();

@@ -4,7 +4,8 @@ use proptest::prelude::*;
 use spokeshave::job::{DEMOS, FlightPoint, Job, PitchControl, Setting, Station, TipLoss, most_governed_rpm};
 use spokeshave::section::library;
 
-/// How many random jobs a property is tried on: few each time, `SPOKESHAVE_CASES` times as many where that is set.
+/// How many random jobs a property is tried on: few each time, `SPOKESHAVE_CASES` times as many where that is
+/// set.
 pub(crate) fn cases(few: u32) -> ProptestConfig {
     let times = std::env::var("SPOKESHAVE_CASES").ok().and_then(|n| n.parse().ok()).unwrap_or(1);
     ProptestConfig::with_cases(few * times)

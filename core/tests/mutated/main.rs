@@ -1,7 +1,8 @@
-//! Everything that reads a text, with texts that are wrong: no panic, no hang, and what is taken holds together.
+//! Everything that reads a text, with texts that are wrong: no panic, no hang, and what is taken holds
+//! together.
 //!
-//! `SPOKESHAVE_MUTATE_SECONDS=300 cargo test --release -p spokeshave --test mutated` goes on with new texts for that long, each.
-//! `tests/fuzz` drives the same targets by the coverage of the code.
+//! `SPOKESHAVE_MUTATE_SECONDS=300 cargo test --release -p spokeshave --test mutated` goes on with new texts
+//! for that long, each. `tests/fuzz` drives the same targets by the coverage of the code.
 
 mod mutation;
 mod reader;

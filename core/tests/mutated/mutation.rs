@@ -1,4 +1,5 @@
-//! Texts made of seed texts by few changes, as a person or a broken tool might make them; and a run of one target over many of them.
+//! Texts made of seed texts by few changes, as a person or a broken tool might make them; and a run of one
+//! target over many of them.
 
 use std::path::Path;
 use std::sync::mpsc::{RecvTimeoutError, channel};
@@ -16,7 +17,8 @@ const PATIENCE: Duration = Duration::from_secs(30);
 /// Longest a text becomes, characters.
 const MOST_CHARACTERS: usize = 60_000;
 
-/// Words that stand where a number or a word should: the ends of the range of numbers, other kinds of value, marks of other formats.
+/// Words that stand where a number or a word should: the ends of the range of numbers, other kinds of value,
+/// marks of other formats.
 const WORDS: &[&str] = &[
     "-1",
     "0",
@@ -222,8 +224,9 @@ pub(crate) fn seeds(folder: &str) -> Vec<String> {
     files.iter().map(|f| std::fs::read_to_string(f).expect("a text")).collect()
 }
 
-/// Tries a target with every seed as it is, then with changed ones: always the same few, or, where `SPOKESHAVE_MUTATE_SECONDS` says so, new ones for that
-/// long. It must come back from every text without a panic.
+/// Tries a target with every seed as it is, then with changed ones: always the same few, or, where
+/// `SPOKESHAVE_MUTATE_SECONDS` says so, new ones for that long. It must come back from every text without a
+/// panic.
 ///
 /// # Panics
 /// With the smallest text found that breaks the target, or that keeps it longer than half a minute.

@@ -85,7 +85,8 @@ fn run(program: &Program, name: &str, most_seconds: f64, (key, value): (&str, &s
     })
 }
 
-/// Every test of the programs with `by` in its name that ends within `most_seconds`, with its time and the mutants it reaches.
+/// Every test of the programs with `by` in its name that ends within `most_seconds`, with its time and the
+/// mutants it reaches.
 ///
 /// # Errors
 /// Where a program cannot be run or a test fails without a mutant.
@@ -104,7 +105,9 @@ pub fn explore<'a>(
     }
     let tests = Mutex::new(Vec::new());
     side_by_side(jobs, &all, |(program, name)| {
-        let list = scratch.join(format!("{}.reached", name.replace("::", ".")));
+        // Two programs can have a test of the same name.
+        let of = program.file.file_stem().unwrap_or_default().to_string_lossy();
+        let list = scratch.join(format!("{of}.{}.reached", name.replace("::", ".")));
         fs::write(&list, "")?;
         let started = Instant::now();
         let end = run(program, name, most_seconds, ("SPOKESHAVE_REACHED", &list.to_string_lossy()))?;

@@ -15,7 +15,8 @@ pub(crate) fn everything() -> Result<Report> {
     let workspace = Workspace::find()?;
     needs::set_up(&workspace)?;
     let mut report = Report::default();
-    // Side by side: linking the page as a whole keeps one core busy, linting and compiling the tests the others.
+    // Side by side: linking the page as a whole keeps one core busy, linting and compiling the tests the
+    // others.
     let (page, compiled) = std::thread::scope(|scope| {
         let page = scope.spawn(|| timed(|| build_page(&workspace, Source::Any)));
         report.check("layout of the sources", || {

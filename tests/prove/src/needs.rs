@@ -1,5 +1,5 @@
-//! Setting up what the checks need beside Rust: a browser with its driver, the accessibility rules, and the other judges of
-//! the bench's files.
+//! Setting up what the checks need beside Rust: a browser with its driver, the accessibility rules, and the
+//! other judges of the bench's files.
 
 use anyhow::{Context, Result};
 use spokeshave_press::{Workspace, run};
@@ -93,7 +93,8 @@ fn python_makes_environments() -> bool {
     asked.is_ok_and(|asked| asked.status.success())
 }
 
-/// The other judges, into an environment of their own in the target folder; made anew when their list changes.
+/// The other judges, into an environment of their own in the target folder; made anew when their list
+/// changes.
 fn judges(workspace: &Workspace) -> Result<()> {
     let python = judges_python(&workspace.target);
     let folder = workspace.target.join("judges");

@@ -8,8 +8,8 @@ use std::path::Path;
 use std::process::Stdio;
 
 const TESTS: [&str; 3] = ["test", "--release", "--workspace"];
-/// Where the random jobs of the property tests begin, unless the environment says otherwise: the same run twice
-/// has the same outcome.
+/// Where the random jobs of the property tests begin, unless the environment says otherwise: the same run
+/// twice has the same outcome.
 const SEED: (&str, &str) = ("PROPTEST_RNG_SEED", "1");
 
 /// Compiles the tests of all crates.

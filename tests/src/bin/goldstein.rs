@@ -8,7 +8,8 @@ use spokeshave::rotor::loss::goldstein::{FINEST, MOST_BLADES, PITCHES, PLACES};
 use spokeshave_tests::goldstein::Goldstein;
 use spokeshave_tests::validation::tip_loss::prandtl;
 
-/// Nodes of the coarse grid: what is left of the error is below half of the last decimal, but for the outermost row.
+/// Nodes of the coarse grid: what is left of the error is below half of the last decimal, but for the
+/// outermost row.
 const NODES: usize = 128;
 const HEAD: &str = "//! Goldstein's factor over Prandtl's times 10,000: for 1, 2, … blades, at `r/R` = 1, 0.9, …, at each pitch of the wake.
 //! Written by `cargo run --release -p spokeshave-tests --bin goldstein`.
@@ -37,7 +38,8 @@ fn main() -> Result<()> {
     std::fs::write(&file, text).with_context(|| file.display().to_string())
 }
 
-/// At `r/R` = 1, 0.9, …; at the very tip both factors are nothing, and their share is nearly a straight line of `r/R`.
+/// At `r/R` = 1, 0.9, …; at the very tip both factors are nothing, and their share is nearly a straight line
+/// of `r/R`.
 fn shares(blades: u32, pitch: f64) -> [f64; PLACES] {
     let exact = Goldstein::on_grid(blades, pitch, NODES);
     let share = |fraction: f64| exact.factor(fraction) / prandtl(blades, pitch, fraction);

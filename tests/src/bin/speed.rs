@@ -1,4 +1,5 @@
-//! What an analysis, a departure map, the speed range, a search and a polar take in the page, beside the same work natively. The figures of the README.
+//! What an analysis, a departure map, the speed range, a search and a polar take in the page, beside the same
+//! work natively. The figures of the README.
 
 use std::time::Instant;
 
@@ -9,7 +10,8 @@ use spokeshave_tests::browser::Browser;
 const WORK: [(&str, u32, u32); 5] =
     [("analysis", 1000, 30), ("map", 20, 30), ("range", 5, 30), ("search", 1, 3), ("polar", 1, 3)];
 
-/// The least time of one piece of work in the page, ms: many at once less the getting ready, each the least of many rounds.
+/// The least time of one piece of work in the page, ms: many at once less the getting ready, each the least
+/// of many rounds.
 const IN_PAGE: &str = r"
     const time = (times) => {
         const begun = performance.now();

@@ -39,7 +39,8 @@ impl Browser {
 
 fn complete_file(folder: &Path) -> Result<Option<PathBuf>> {
     let files: Vec<PathBuf> = std::fs::read_dir(folder)?.flatten().map(|entry| entry.path()).collect();
-    // Chromium writes into a file of its own naming until all is there; the last name may stand beside it, empty, before.
+    // Chromium writes into a file of its own naming until all is there; the last name may stand beside it,
+    // empty, before.
     let partial = |file: &PathBuf| {
         let hidden = file.file_name().is_some_and(|name| name.to_string_lossy().starts_with('.'));
         hidden || file.extension().is_some_and(|extension| extension == "crdownload")

@@ -19,8 +19,8 @@ pub(super) struct Driver {
 }
 
 impl Driver {
-    /// Starts the driver on a free port; the browsers it starts show their windows on the desktop. What it and they say of
-    /// faults goes into `folder`.
+    /// Starts the driver on a free port; the browsers it starts show their windows on the desktop. What it
+    /// and they say of faults goes into `folder`.
     pub(super) async fn start(desktop: Option<&Desktop>, folder: &Path) -> Result<Self> {
         let words = folder.join("driver.txt");
         let program = tools::chromedriver()

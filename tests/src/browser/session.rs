@@ -24,8 +24,8 @@ pub struct Browser {
     driver: Driver,
 }
 
-/// Runs a check in a browser of its own and ends the browser whatever happens. Where the browser came to an end by
-/// itself in the middle of it, once more in a new one.
+/// Runs a check in a browser of its own and ends the browser whatever happens. Where the browser came to an
+/// end by itself in the middle of it, once more in a new one.
 ///
 /// # Errors
 /// What the check returns, or that no browser could be started.

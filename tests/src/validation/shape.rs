@@ -83,7 +83,8 @@ const LIGHT: Basis = Basis {
     why: "what the program's table of his factor is held to, 0.001, and as much for a load that is light but not nothing",
 };
 
-/// The circulation of designs for next to no thrust, over that of a propeller of very many blades: Goldstein's factor.
+/// The circulation of designs for next to no thrust, over that of a propeller of very many blades:
+/// Goldstein's factor.
 pub(super) fn least_loss_goldstein() -> Vec<Check> {
     let propellers = [(2, 0.2), (2, 0.4), (3, 0.3), (4, 0.25)];
     let each = propellers.into_iter().map(|(blades, lambda)| {

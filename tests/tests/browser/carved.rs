@@ -43,7 +43,8 @@ async fn here(browser: &Browser) -> Result<String> {
     Ok(name.as_str().context("no name")?.to_owned())
 }
 
-/// What callipers and protractor read of a blade: angle on the face, chord and thickness at each station, as typed.
+/// What callipers and protractor read of a blade: angle on the face, chord and thickness at each station, as
+/// typed.
 fn read(rig: &Rig, blade: usize) -> [Vec<String>; 3] {
     let drawn = &rig.rotor.blade;
     let radii: Vec<f64> = drawn.station_radii_m().take(MEASURED).collect();

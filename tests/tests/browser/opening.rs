@@ -5,7 +5,8 @@ use spokeshave_tests::browser::{built_page, drive};
 
 /// Largest file that is still handed around by mail without a thought.
 const LARGEST_PAGE_BYTES: u64 = 1_500_000;
-/// From opening the file to a page that answers; the least of three openings, for the machine does other things as well.
+/// From opening the file to a page that answers; the least of three openings, for the machine does other
+/// things as well.
 const LONGEST_START_MS: f64 = 1000.0;
 
 #[tokio::test(flavor = "multi_thread")]

@@ -1,5 +1,5 @@
-//! The bench's files before other judges: trimesh (solids), ezdxf (DXF), `MuPDF` (PDF and SVG), shapely (areas). `cargo prove`
-//! installs them from `PyPI`, pinned by `judges/requirements.txt`.
+//! The bench's files before other judges: trimesh (solids), ezdxf (DXF), `MuPDF` (PDF and SVG), shapely
+//! (areas). `cargo prove` installs them from `PyPI`, pinned by `judges/requirements.txt`.
 
 use std::path::Path;
 
@@ -49,7 +49,8 @@ fn validate_solid_trimesh() {
                     job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: 0.0 };
                 }
                 if one_piece && job.propeller.blades != 2 {
-                    // The boss of more blades is bent into each one's share of the turn: no sum of plane sections.
+                    // The boss of more blades is bent into each one's share of the turn: no sum of plane
+                    // sections.
                     continue;
                 }
                 let folder = tempfile::tempdir().unwrap();

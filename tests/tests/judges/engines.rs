@@ -1,4 +1,5 @@
-//! The page in the other browser engines: one job from the drawing to the logbook in each, judged by the core's own figures.
+//! The page in the other browser engines: one job from the drawing to the logbook in each, judged by the
+//! core's own figures.
 
 use std::path::Path;
 

@@ -31,8 +31,8 @@ fn demos() -> impl Iterator<Item = Rig> {
     DEMOS.iter().map(|demo| Rig::new(&Job::from_json(demo.json).unwrap()).unwrap())
 }
 
-/// A station at some speed of flight and rotation as the judge needs it; `None` where lift points backward or the
-/// windmill brake state is met, for which the judge has no equations.
+/// A station at some speed of flight and rotation as the judge needs it; `None` where lift points backward or
+/// the windmill brake state is met, for which the judge has no equations.
 fn station(rig: &Rig, name: &str, i: u32) -> Option<Value> {
     let (blade, known) = (&rig.rotor.blade, rig.condition(0)?);
     let tip_m_s = known.rotation_rad_s * blade.radius_m * (0.5 + 0.6 * spread(i, 0));

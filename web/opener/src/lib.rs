@@ -1,7 +1,8 @@
 //! Unpacks the page's own WebAssembly module inside the browser.
 //!
-//! The browser itself can open gzip and base64; LZMA makes the module a quarter smaller than gzip, and base 85 takes five letters for four bytes
-//! in place of base64's four for three. This small module comes in the browser's own packing, opens the large one, and is done.
+//! The browser itself can open gzip and base64; LZMA makes the module a quarter smaller than gzip, and base
+//! 85 takes five letters for four bytes in place of base64's four for three. This small module comes in the
+//! browser's own packing, opens the large one, and is done.
 
 use std::io::Read;
 use wasm_bindgen::prelude::wasm_bindgen;
@@ -9,8 +10,8 @@ use wasm_bindgen::prelude::wasm_bindgen;
 /// Memory that unpacking may take, KiB: the dictionary is as long as the module.
 const MEMORY_LIMIT_KIB: u32 = 64 << 10;
 
-/// The module that `packed` holds: LZMA with its header in the letters of RFC 1924, a comma in place of `<`, which a script node must
-/// not hold before some other letters.
+/// The module that `packed` holds: LZMA with its header in the letters of RFC 1924, a comma in place of `<`,
+/// which a script node must not hold before some other letters.
 ///
 /// # Errors
 /// If the text is no such stream, or was cut short.

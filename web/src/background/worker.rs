@@ -8,8 +8,8 @@ use web_sys::js_sys::wasm_bindgen::JsValue;
 
 use super::{polars, shape};
 
-/// Makes polars; called in a worker with the order as JSON. `hear` gets `("report", JSON)` again and again, or `("fault",
-/// text)` if the program fails.
+/// Makes polars; called in a worker with the order as JSON. `hear` gets `("report", JSON)` again and again,
+/// or `("fault", text)` if the program fails.
 #[wasm_bindgen]
 pub fn make_polars(order: &str, hear: &Function) {
     carry_out(order, hear, |order, tell| polars::carried_out(order, tell), polars::Report::Refused);

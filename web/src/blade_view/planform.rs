@@ -1,8 +1,8 @@
 //! The outline of a blade from its chord.
 //!
 //! A job says how wide the blade is, not where its axis lies across the chord, so the drawing puts it
-//! [`AHEAD`] of the chord behind the leading edge. Outside the outermost station the tip is rounded for the eye:
-//! the computation holds the last chord to the tip.
+//! [`AHEAD`] of the chord behind the leading edge. Outside the outermost station the tip is rounded for the
+//! eye: the computation holds the last chord to the tip.
 
 use crate::chart::path::polygon;
 use spokeshave::blade::Blade;
@@ -57,7 +57,8 @@ impl Planform {
         [AHEAD * chord, (AHEAD - 1.0) * chord]
     }
 
-    /// The blade between two radii as path data; `place` puts a radius and an offset from the axis (both m) on the screen.
+    /// The blade between two radii as path data; `place` puts a radius and an offset from the axis (both m)
+    /// on the screen.
     #[must_use]
     pub fn piece(&self, from_m: f64, to_m: f64, place: impl Fn(f64, f64) -> [f64; 2]) -> String {
         // Steps gather at the outer end, where the tip is round.
@@ -84,7 +85,8 @@ impl Planform {
         polygon(points(0).chain(points(1).rev()))
     }
 
-    /// The radii between which each station's colour stands: halfway to its neighbours, hub and tip at the ends.
+    /// The radii between which each station's colour stands: halfway to its neighbours, hub and tip at the
+    /// ends.
     #[must_use]
     pub fn bands_m(&self, stations_m: &[f64]) -> Vec<[f64; 2]> {
         let middle = |i: usize| 0.5 * (stations_m[i] + stations_m[i + 1]);

@@ -5,7 +5,8 @@ pub const BREAKS_DEG: [f64; 10] = [-6.0, -4.0, -3.0, -2.0, -1.0, 1.0, 2.0, 3.0, 
 /// How many classes there are.
 pub const CLASSES: usize = BREAKS_DEG.len() + 1;
 
-/// Class of a departure, 0 (most slack) to 10 (hardest); 5 holds the best. A break belongs to the class nearer zero.
+/// Class of a departure, 0 (most slack) to 10 (hardest); 5 holds the best. A break belongs to the class
+/// nearer zero.
 #[must_use]
 pub fn class(departure_deg: f64) -> usize {
     BREAKS_DEG.iter().filter(|&&b| departure_deg > b || (b < 0.0 && departure_deg == b)).count()

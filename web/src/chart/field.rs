@@ -1,7 +1,8 @@
 //! One figure as a grid for contours: gaps filled, padded by a cell all round.
 //!
-//! Contours of a grid close half a cell outside its outermost points, and points may stand half a cell inside their frame. The padding goes on as the last two points do, so that lines run straight to the frame,
-//! which cuts off where they close.
+//! Contours of a grid close half a cell outside its outermost points, and points may stand half a cell inside
+//! their frame. The padding goes on as the last two points do, so that lines run straight to the frame, which
+//! cuts off where they close.
 
 use super::path::Path;
 use contour::ContourBuilder;
@@ -21,8 +22,8 @@ pub struct Field {
 }
 
 impl Field {
-    /// A figure by row and column, its columns and rows at these pixels. `None` with fewer than two rows or columns, and where the figure is
-    /// nowhere.
+    /// A figure by row and column, its columns and rows at these pixels. `None` with fewer than two rows or
+    /// columns, and where the figure is nowhere.
     #[must_use]
     pub fn new(known: &Array2<Option<f64>>, xs: Vec<f64>, ys: Vec<f64>) -> Option<Self> {
         let (rows, columns) = known.dim();

@@ -2,7 +2,8 @@
 
 use yew::prelude::*;
 
-/// Patterns that the style sheet refers to by `url(#hatch-…)`. Has to stand once in the page, shown (it takes no room).
+/// Patterns that the style sheet refers to by `url(#hatch-…)`. Has to stand once in the page, shown (it takes
+/// no room).
 #[component]
 pub fn Hatches() -> Html {
     html! {

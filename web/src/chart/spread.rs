@@ -1,8 +1,9 @@
 //! Labels along a line without one on top of another.
 
-/// Centres for labels that want to stand at `wanted` (rising), each taking its size in `sizes`, inside `low..high`:
-/// as near to where they want to be as the others allow (least squares, by pooling neighbours that collide).
-/// When there is no room for all, they stand tightly from `low` on and run over `high`: thin them first.
+/// Centres for labels that want to stand at `wanted` (rising), each taking its size in `sizes`, inside
+/// `low..high`: as near to where they want to be as the others allow (least squares, by pooling neighbours
+/// that collide). When there is no room for all, they stand tightly from `low` on and run over `high`: thin
+/// them first.
 #[must_use]
 pub fn spread(wanted: &[f64], sizes: &[f64], low: f64, high: f64) -> Vec<f64> {
     let mut offset = 0.0;

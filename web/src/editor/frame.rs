@@ -74,7 +74,8 @@ fn ends(values: impl Iterator<Item = f64>) -> (f64, f64) {
     values.fold((f64::INFINITY, f64::NEG_INFINITY), |(a, b), v| (a.min(v), b.max(v)))
 }
 
-/// From nothing for lengths; for angles from the least, with room to drag and for the best ones, if they are near.
+/// From nothing for lengths; for angles from the least, with room to drag and for the best ones, if they are
+/// near.
 fn span(still: &[DrawnStation], measures: &[Measure], best: &Best) -> (f64, f64) {
     let drawn = || still.iter().flat_map(|d| measures.iter().filter_map(|m| m.of(d)));
     let (low, high) = ends(drawn());

@@ -1,4 +1,5 @@
-//! Twist, chord and thickness as curves over radius, with a green ring at each station to drag or to move by keys.
+//! Twist, chord and thickness as curves over radius, with a green ring at each station to drag or to move by
+//! keys.
 
 pub mod curve;
 pub mod frame;

@@ -44,7 +44,8 @@ pub fn pressed(measure: Measure, value: f64, upward: bool, fine: bool) -> f64 {
 }
 
 impl Pull {
-    /// The ring after the pointer has moved to `y_px`; `px_per_unit` is how far down one unit goes (below zero: up).
+    /// The ring after the pointer has moved to `y_px`; `px_per_unit` is how far down one unit goes (below
+    /// zero: up).
     #[must_use]
     pub fn moved(self, y_px: f64, px_per_unit: f64, fine: bool) -> Self {
         let by = (y_px - self.y_px) / px_per_unit;

@@ -33,8 +33,8 @@ fn try_offer(name: &str, blob: Blob) -> Option<()> {
     Some(())
 }
 
-/// Reads a job file that was picked in an input and says what to do with it. The reading ends when what is returned is
-/// dropped.
+/// Reads a job file that was picked in an input and says what to do with it. The reading ends when what is
+/// returned is dropped.
 pub fn read_picked(input: &HtmlInputElement, act: impl Fn(Action) + 'static) -> Option<FileReader> {
     read_text(input, MOST_BYTES, move |name, text| act(opened(name, text)))
 }

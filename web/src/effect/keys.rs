@@ -5,7 +5,8 @@ use web_sys::{HtmlElement, KeyboardEvent};
 
 use crate::state::Action;
 
-/// What a key pressed anywhere on the page means; `drafting` while a box holds a text that is not part of the job.
+/// What a key pressed anywhere on the page means; `drafting` while a box holds a text that is not part of the
+/// job.
 #[must_use]
 pub fn meaning(event: &KeyboardEvent, drafting: bool) -> Option<Action> {
     if event.ctrl_key() || event.meta_key() {

@@ -1,4 +1,5 @@
-//! Where the page touches the browser: files, what is remembered of the view, the keyboard, work after a frame.
+//! Where the page touches the browser: files, what is remembered of the view, the keyboard, work after a
+//! frame.
 
 pub mod after_frame;
 pub mod file;

@@ -5,8 +5,8 @@ use web_sys::HtmlInputElement;
 
 use crate::number::fixed;
 
-/// Reads the file picked in an input and hands on its name with its text, or with why it could not be read. The reading ends
-/// when what is returned is dropped.
+/// Reads the file picked in an input and hands on its name with its text, or with why it could not be read.
+/// The reading ends when what is returned is dropped.
 pub fn read_text(
     input: &HtmlInputElement,
     most_bytes: usize,

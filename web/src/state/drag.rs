@@ -28,8 +28,8 @@ impl Held {
         }
     }
 
-    /// The job with what is held at a value (SI or degrees), `span` stations on either side drawn along; `None` where that
-    /// is not allowed.
+    /// The job with what is held at a value (SI or degrees), `span` stations on either side drawn along;
+    /// `None` where that is not allowed.
     #[must_use]
     pub fn moved(self, job: &Job, value: f64, span: usize) -> Option<Job> {
         match self {
@@ -51,7 +51,8 @@ pub struct Drag {
     pub start: Rc<Job>,
 }
 
-/// Share of the movement that a station so many places away takes, when `span` stations on either side follow.
+/// Share of the movement that a station so many places away takes, when `span` stations on either side
+/// follow.
 #[must_use]
 pub fn follows(away: usize, span: usize) -> f64 {
     if away > span {
@@ -66,7 +67,8 @@ pub fn drawn(job: &Job) -> Vec<DrawnStation> {
     Rig::new(job).map_or_else(|_| Vec::new(), |rig| stations(&rig.rotor.blade, job.propeller.angle_reference))
 }
 
-/// The job with a station's figure (SI) changed and its neighbours drawn along; `None` where that is not allowed.
+/// The job with a station's figure (SI) changed and its neighbours drawn along; `None` where that is not
+/// allowed.
 #[must_use]
 pub fn dragged(job: &Job, station: usize, measure: Measure, value: f64, span: usize) -> Option<Job> {
     let before = drawn(job);
@@ -76,7 +78,8 @@ pub fn dragged(job: &Job, station: usize, measure: Measure, value: f64, span: us
         let share = follows(i.abs_diff(station), span);
         if share > 0.0 {
             let moved = measure.of(neighbour)? + share * change;
-            // What is dragged stands exactly where it was put; what follows is rounded to what a rule can read.
+            // What is dragged stands exactly where it was put; what follows is rounded to what a rule can
+            // read.
             let moved = if i == station { value } else { rounded(measure, moved) };
             Field::Station(i, measure).write(&mut next, moved);
         }

@@ -22,7 +22,8 @@ pub struct Draft {
 /// All drafts by field.
 pub type Drafts = BTreeMap<Field, Draft>;
 
-/// The text a box shows while nothing is typed: enough decimals to tell what is in the job, none that say nothing.
+/// The text a box shows while nothing is typed: enough decimals to tell what is in the job, none that say
+/// nothing.
 #[must_use]
 pub fn shown_text(job: &Job, drawn: &[DrawnStation], units: Units, field: Field) -> String {
     if let Some(text) = field.text(job) {
@@ -78,7 +79,8 @@ pub fn tried(
     written(job, units, field, value)
 }
 
-/// An empty box takes out what the job may go without; full throttle without an airspeed means as fast as it goes.
+/// An empty box takes out what the job may go without; full throttle without an airspeed means as fast as it
+/// goes.
 fn emptied(job: &Job, field: Field, text: &str) -> Option<Job> {
     let mut next = job.clone();
     (text.trim().is_empty() && field.clear(&mut next) && next.check().is_empty()).then_some(next)

@@ -1,4 +1,5 @@
-//! The figures of a job that are typed into boxes: where each stands, what it measures, how it is read and written.
+//! The figures of a job that are typed into boxes: where each stands, what it measures, how it is read and
+//! written.
 
 use spokeshave::drawn::DrawnStation;
 use spokeshave::job::{AngleReference, Job, PitchControl, Setting};
@@ -210,7 +211,8 @@ impl Field {
         place.map(|place| text.clone_into(place)).is_some()
     }
 
-    /// Writes the figure, SI, into a job; whether there was a place for it. What is allowed is for [`Job::check`] to say.
+    /// Writes the figure, SI, into a job; whether there was a place for it. What is allowed is for
+    /// [`Job::check`] to say.
     pub fn write(self, job: &mut Job, value: f64) -> bool {
         let p = &mut job.propeller;
         match (self, &mut p.pitch_control) {

@@ -1,5 +1,5 @@
-//! The page's state and the one reducer that changes it. Nothing here touches the browser: texts and events come in as
-//! actions, and what has to be stored or computed is read off the state that comes out.
+//! The page's state and the one reducer that changes it. Nothing here touches the browser: texts and events
+//! come in as actions, and what has to be stored or computed is read off the state that comes out.
 
 pub mod action;
 pub mod choice;
@@ -123,8 +123,8 @@ impl State {
         }
     }
 
-    /// The state to start with: the job found, else the first example. A job that cannot be read is said. A page that was
-    /// saved with a job is a file of that job.
+    /// The state to start with: the job found, else the first example. A job that cannot be read is said. A
+    /// page that was saved with a job is a file of that job.
     #[must_use]
     pub fn started(found: Option<&str>, in_file: Option<&str>) -> Self {
         match found.map(Job::from_json) {
@@ -391,8 +391,8 @@ fn example() -> Job {
     Job::from_json(DEMOS[0].json).expect("the examples are valid jobs")
 }
 
-/// The flight point and the station shown first: the cruise, if one is called so, and the station nearest to three
-/// quarters of the radius.
+/// The flight point and the station shown first: the cruise, if one is called so, and the station nearest to
+/// three quarters of the radius.
 fn places(job: &Job) -> (usize, usize) {
     let off = |f: f64| (f - 0.75).abs();
     let stations = job.propeller.stations.iter().enumerate();

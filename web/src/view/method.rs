@@ -1,4 +1,5 @@
-//! How it is computed: the switches of the method, the tables used and where they come from, what lies outside them.
+//! How it is computed: the switches of the method, the tables used and where they come from, what lies
+//! outside them.
 
 use std::rc::Rc;
 
@@ -76,7 +77,8 @@ fn Switches(props: &SwitchesProps) -> Html {
     }
 }
 
-/// Whose factor at the tip. Goldstein's is exact for light loads, Prandtl's is what most comparisons are made with.
+/// Whose factor at the tip. Goldstein's is exact for light loads, Prandtl's is what most comparisons are made
+/// with.
 fn tip_loss(act: &Act, whose: TipLoss) -> Html {
     const FACTORS: [TipLoss; 2] = [TipLoss::Prandtl, TipLoss::Goldstein];
     let options: Vec<AttrValue> = vec!["Prandtl (1919)".into(), "Goldstein (1929)".into()];

@@ -4,8 +4,8 @@ use wasm_bindgen::JsCast;
 use web_sys::{Element, HtmlElement, HtmlInputElement, KeyboardEvent};
 use yew::TargetCast;
 
-/// Enter in a box goes on to the next one `within` what holds them, or to a button marked `next` there; leaving the one before
-/// takes what was typed.
+/// Enter in a box goes on to the next one `within` what holds them, or to a button marked `next` there;
+/// leaving the one before takes what was typed.
 pub(super) fn next(e: &KeyboardEvent, within: &str) {
     if e.key() != "Enter" {
         return;

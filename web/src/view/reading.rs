@@ -208,7 +208,8 @@ fn marks(props: &MapFigureProps) -> Vec<FlightMark> {
         .collect()
 }
 
-/// What the map was worked out for, behind the list of what it follows: full throttle where the rpm follows the speed, else one rpm.
+/// What the map was worked out for, behind the list of what it follows: full throttle where the rpm follows
+/// the speed, else one rpm.
 fn map_note(props: &MapFigureProps) -> String {
     let (state, map) = (&props.state, &props.map);
     let (low, high) = map.rpm.iter().fold((f64::INFINITY, 0.0_f64), |(a, b), r| (a.min(*r), b.max(*r)));
@@ -256,7 +257,8 @@ fn section(props: &PageProps) -> Option<(String, Option<Section>)> {
     Some((name.clone(), job.sections.iter().find(|own| own.name == *name).cloned()))
 }
 
-/// The outline of a section at a thickness, made anew only when one of the two changes; empty where it is not known.
+/// The outline of a section at a thickness, made anew only when one of the two changes; empty where it is not
+/// known.
 #[hook]
 fn use_outline(section: Option<(String, Option<Section>)>, thickness_ratio: f64) -> Rc<Vec<[f64; 2]>> {
     use_memo((section, thickness_ratio.to_bits()), move |(section, _)| {

@@ -1,4 +1,5 @@
-//! How much room the window has: the blade stands where there is width for it and lies down where there is not.
+//! How much room the window has: the blade stands where there is width for it and lies down where there is
+//! not.
 
 use gloo_events::EventListener;
 use yew::prelude::*;

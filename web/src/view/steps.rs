@@ -80,7 +80,8 @@ fn top_of(id: &str) -> Option<f64> {
     Some(part.get_bounding_client_rect().top())
 }
 
-/// Whether the part a link was pressed for is where the link leads: at the top, or as near to it as the page's end lets it.
+/// Whether the part a link was pressed for is where the link leads: at the top, or as near to it as the
+/// page's end lets it.
 fn is_reached(id: &str) -> bool {
     top_of(id).is_some_and(|top| top > -1.0 && (top < REACHED_PX || is_at_end()))
 }

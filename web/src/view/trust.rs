@@ -1,5 +1,5 @@
-//! How far to trust it: what the program's figures were compared with, what misses, and pictures of it; all written by the
-//! tests.
+//! How far to trust it: what the program's figures were compared with, what misses, and pictures of it; all
+//! written by the tests.
 
 use yew::prelude::*;
 

@@ -1,9 +1,10 @@
-//! How much room a text takes. Widths are those of Helvetica's own metrics, which every PDF viewer has and which the sans
-//! serif faces of browsers follow closely.
+//! How much room a text takes. Widths are those of Helvetica's own metrics, which every PDF viewer has and
+//! which the sans serif faces of browsers follow closely.
 
 use super::{Anchor, Text};
 
-/// Widths of the characters from space to tilde, in thousandths of the size (Adobe's font metrics of Helvetica).
+/// Widths of the characters from space to tilde, in thousandths of the size (Adobe's font metrics of
+/// Helvetica).
 const HELVETICA: [u16; 95] = [
     278, 278, 355, 556, 556, 889, 667, 191, 333, 333, 389, 584, 278, 333, 278, 278, 556, 556, 556, 556, 556,
     556, 556, 556, 556, 556, 278, 278, 584, 584, 584, 556, 1015, 667, 667, 722, 722, 667, 611, 778, 722, 278,

@@ -1,8 +1,9 @@
 //! The thin lines on a template card: the pitch axis, and a line at the blade angle with its name.
 //!
-//! The section's own chord line lies in the wood, so the line on a card is drawn beside it, parallel: at the angle to the
-//! chord line, or on the face card of a flat face at the angle of that face. It stays inside the card, clear of its words;
-//! where no length of it that is worth laying a protractor on is free, there is none.
+//! The section's own chord line lies in the wood, so the line on a card is drawn beside it, parallel: at the
+//! angle to the chord line, or on the face card of a flat face at the angle of that face. It stays inside the
+//! card, clear of its words; where no length of it that is worth laying a protractor on is free, there is
+//! none.
 
 use crate::bench::draw::{Drawing, Item, Layer, Text};
 use crate::bench::work::{Bench, Carved};

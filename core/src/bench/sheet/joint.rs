@@ -1,7 +1,8 @@
 //! How the boards of three and more blades meet in the hub: lapped, as is common practice.
 //!
-//! In every lamination one blade's board runs through the hub (two boards that face one another, where the number of blades is even); the others butt against
-//! its sides, and against one another half way between them. The next lamination is turned on by one blade, so that no joint lies over the one below it.
+//! In every lamination one blade's board runs through the hub (two boards that face one another, where the
+//! number of blades is even); the others butt against its sides, and against one another half way between
+//! them. The next lamination is turned on by one blade, so that no joint lies over the one below it.
 
 use std::f64::consts::TAU;
 
@@ -112,8 +113,8 @@ fn cut(outline: &[[f64; 2]], normal: [f64; 2], least: f64) -> Vec<[f64; 2]> {
     kept
 }
 
-/// How the other boards meet the side of the one that runs through: the acute angle between their middle lines, degrees, and how far from the axis the
-/// middle line ends, m. Each angle once.
+/// How the other boards meet the side of the one that runs through: the acute angle between their middle
+/// lines, degrees, and how far from the axis the middle line ends, m. Each angle once.
 fn butts(bench: &Bench) -> Vec<(f64, f64)> {
     let (n, half_m) = (bench.form.blade.count, 0.5 * bench.blank.width_m);
     let mut all: Vec<(f64, f64)> = Vec::new();

@@ -45,7 +45,8 @@ fn label(station: &Carved, unit: Unit) -> String {
     format!("{}: r {}", station.number, unit.figure(station.heights.radius_m))
 }
 
-/// The blade in plan, from the axis where hub and two blades are one piece, else from where it stands free of the hub.
+/// The blade in plan, from the axis where hub and two blades are one piece, else from where it stands free of
+/// the hub.
 fn outline(drawing: &mut Drawing, bench: &Bench, two: bool) {
     let hub = bench.form.blade.hub_radius_m;
     let from = if two {

@@ -1,4 +1,5 @@
-//! The blank seen along its width, its rear to the left: both edges, the wood's lowest and highest line, the glue lines.
+//! The blank seen along its width, its rear to the left: both edges, the wood's lowest and highest line, the
+//! glue lines.
 
 use crate::bench::draw::{Anchor, Drawing, Layer};
 use crate::bench::page::Leaf;

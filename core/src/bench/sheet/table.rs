@@ -31,8 +31,8 @@ pub(crate) const fn words(head: &str, mm: f64) -> Column<'_> {
     Column { head, mm, words: true }
 }
 
-/// Draws a table with its upper left corner at `at`: headings in as many lines as they need, words to the left, figures to the right; gives
-/// the height it takes, mm.
+/// Draws a table with its upper left corner at `at`: headings in as many lines as they need, words to the
+/// left, figures to the right; gives the height it takes, mm.
 pub(crate) fn table(drawing: &mut Drawing, at: [f64; 2], columns: &[Column], rows: &[Vec<String>]) -> f64 {
     table_of(drawing, at, columns, rows, 1.0)
 }

@@ -1,9 +1,11 @@
-//! Station templates: for each station a card for the back (the cambered, forward side) and one for the face (the flat, rear side).
+//! Station templates: for each station a card for the back (the cambered, forward side) and one for the face
+//! (the flat, rear side).
 //!
-//! Seen from the tip towards the hub, standing as in the propeller while the rear of the blank lies on the bench. The cards meet along
-//! the chord line, drawn out past both edges: laid back to back they leave the section's outline between them, and the
-//! line on which they meet is the angle line. Their outer edges are the datum: square to the axis and at the same
-//! distance from the blank at every station, so that a straight-edge over several cards shows a twist that is out.
+//! Seen from the tip towards the hub, standing as in the propeller while the rear of the blank lies on the
+//! bench. The cards meet along the chord line, drawn out past both edges: laid back to back they leave the
+//! section's outline between them, and the line on which they meet is the angle line. Their outer edges are
+//! the datum: square to the axis and at the same distance from the blank at every station, so that a
+//! straight-edge over several cards shows a twist that is out.
 
 use crate::bench::draw::{Anchor, Drawing, Item, Layer, Text, breadth_mm};
 use crate::bench::page::{Leaf, wrapped};

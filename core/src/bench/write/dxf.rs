@@ -1,5 +1,5 @@
-//! A drawing as DXF R12 in millimetres, with a layer for each kind of line: the plainest form of that open format, which
-//! every machine's program reads.
+//! A drawing as DXF R12 in millimetres, with a layer for each kind of line: the plainest form of that open
+//! format, which every machine's program reads.
 
 use std::fmt::Write;
 

@@ -4,8 +4,8 @@ use std::fmt::Write;
 
 use crate::bench::work::Bench;
 
-/// Ring by ring from the inside out, point by point round each: radius, side, and the point in the propeller's frame
-/// (see [`crate::bench`]; `y` is turned over for a propeller that turns the other way).
+/// Ring by ring from the inside out, point by point round each: radius, side, and the point in the
+/// propeller's frame (see [`crate::bench`]; `y` is turned over for a propeller that turns the other way).
 #[must_use]
 pub fn surface_csv(bench: &Bench) -> String {
     let mut out = String::from("ring,radius_m,side,point,x_m,y_m,z_m\n");

@@ -1,8 +1,8 @@
-//! `spokeshave airfoils`: computes the tables of the section families anew, by the section solver, to write them or to
-//! compare them with the present ones.
+//! `spokeshave airfoils`: computes the tables of the section families anew, by the section solver, to write
+//! them or to compare them with the present ones.
 //!
-//! The files are the same bit for bit from run to run: the sweeps are independent, their order in the files is fixed, and no
-//! figure depends on time or on the count of threads.
+//! The files are the same bit for bit from run to run: the sweeps are independent, their order in the files
+//! is fixed, and no figure depends on time or on the count of threads.
 
 mod catalogue;
 mod record;

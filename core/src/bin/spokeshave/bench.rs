@@ -22,7 +22,8 @@ pub(crate) struct Args {
 enum What {
     /// Stress and margin by station, deflection, vibration, weight and balance, hub
     Strength(strength::Args),
-    /// Templates, blank, bench heights, hub, job card, what to take off carved blades: full-size SVG sheets, one PDF
+    /// Templates, blank, bench heights, hub, job card, what to take off carved blades: full-size SVG sheets,
+    /// one PDF
     Sheets(sheets::Args),
     /// The blade for machines: STL, CSV of the surface, DXF drawings
     Files(files::Args),

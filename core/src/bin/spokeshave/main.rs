@@ -1,6 +1,7 @@
 //! The command line, thin over the library.
 //!
-//! Exit codes: 0 answered, 1 no answer (a flight point or request has none), 2 bad input (message on standard error).
+//! Exit codes: 0 answered, 1 no answer (a flight point or request has none), 2 bad input (message on standard
+//! error).
 
 mod airfoils;
 mod analyse;
@@ -68,7 +69,8 @@ enum Command {
     Carved(carved::Args),
     /// What readings of ground runs and flights tell, and what to change
     Logbook(logbook::Args),
-    /// The whole job as one PDF: verdict, inputs, method, charts, stations, strength, carving tables, readings
+    /// The whole job as one PDF: verdict, inputs, method, charts, stations, strength, carving tables,
+    /// readings
     Report(report::Args),
     /// Coefficients over speed at a flight point's rpm and air
     Sweep(sweep::Args),

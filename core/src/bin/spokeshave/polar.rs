@@ -41,7 +41,8 @@ pub(crate) struct Args {
     /// Thickness the trailing edge is left with, over the chord
     #[arg(long, value_name = "T")]
     blunt: Option<f64>,
-    /// Trip the flow at these places on the upper and the lower side, over the chord; "free" leaves a side alone
+    /// Trip the flow at these places on the upper and the lower side, over the chord; "free" leaves a side
+    /// alone
     #[arg(long, value_name = "UPPER,LOWER")]
     trip: Option<Trips>,
     /// A rough or taped leading edge: the flow is tripped at 5 % of the chord above and 10 % below

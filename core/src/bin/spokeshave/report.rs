@@ -24,7 +24,8 @@ pub(crate) struct Args {
     /// Where the pages go, one PDF; a file of this name is replaced
     #[arg(long, value_name = "FILE")]
     pdf: PathBuf,
-    /// Flight point whose air the speed range has and for which wood is taken off; the first in flight without it
+    /// Flight point whose air the speed range has and for which wood is taken off; the first in flight
+    /// without it
     #[arg(long, value_name = "NAME")]
     point: Option<String>,
     /// Size of the paper

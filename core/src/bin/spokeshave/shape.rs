@@ -17,7 +17,8 @@ use spokeshave::shape::{ShapeError, Shaped};
 use crate::briefs::briefs;
 use crate::input::{JobSource, Outcome, Stop, print, print_json};
 
-/// Strength is not judged by any of these commands; see to it by a proven practice or a calculation before such a blade is run.
+/// Strength is not judged by any of these commands; see to it by a proven practice or a calculation before
+/// such a blade is run.
 #[derive(clap::Args)]
 pub(crate) struct Args {
     #[command(flatten)]
@@ -34,7 +35,8 @@ enum How {
     LeastLoss(least_loss::Args),
     /// Diameter, pitch, twist and chord for the best over several flight points, within limits
     Search(search::Args),
-    /// Any figure over pitch and diameter, with the limits broken there; those of rpm and tip at that flight point alone
+    /// Any figure over pitch and diameter, with the limits broken there; those of rpm and tip at that flight
+    /// point alone
     Chart(chart::Args),
     /// What an error of angle, chord or thickness costs, station by station
     Error(error::Args),
@@ -85,8 +87,8 @@ fn told<T: Serialize>(
     Ok(true)
 }
 
-/// A figure that is not allowed is bad input; what else cannot be has no answer, which goes to standard error, so that what is
-/// piped on stays a document.
+/// A figure that is not allowed is bad input; what else cannot be has no answer, which goes to standard
+/// error, so that what is piped on stays a document.
 fn refused(e: &ShapeError) -> Outcome {
     if matches!(e, ShapeError::Figure { .. }) {
         return Err(Stop::bad(e));

@@ -14,7 +14,8 @@ const MOST: u32 = 20_000;
 
 #[derive(clap::Args)]
 pub(crate) struct VaryArgs {
-    /// Work out the job for n values from a to b of a number in the file, by its path, and print CSV; twice for two numbers
+    /// Work out the job for n values from a to b of a number in the file, by its path, and print CSV; twice
+    /// for two numbers
     #[arg(long, value_name = "PATH=A..B:N", conflicts_with_all = ["json"])]
     vary: Vec<Vary>,
 }
@@ -102,8 +103,8 @@ impl VaryArgs {
     }
 }
 
-/// Puts a number at a path such as `propeller.stations[3].chord_m`. A name that is not there yet is added to its object, so that optional numbers
-/// can vary; the job's check refuses one that it does not know.
+/// Puts a number at a path such as `propeller.stations[3].chord_m`. A name that is not there yet is added to
+/// its object, so that optional numbers can vary; the job's check refuses one that it does not know.
 fn set(document: &mut Value, path: &str, value: f64) -> Result<(), Stop> {
     let missing = |at: &str| Stop::BadInput(format!("--vary: {path}: the job has no {at}"));
     let (parent, name) = path.rsplit_once('.').unwrap_or(("", path));

@@ -44,7 +44,8 @@ pub(super) fn check_piston(found: &mut Found, p: &Piston, aircraft: Option<&Airc
     }
 }
 
-/// The most propeller rpm a governor may hold on a piston engine, and what sets it: its limit or the end of its curve.
+/// The most propeller rpm a governor may hold on a piston engine, and what sets it: its limit or the end of
+/// its curve.
 fn most_governed(p: &Piston) -> (f64, &'static str) {
     let last = p.full_throttle.last().map_or(f64::INFINITY, |f| f.rpm);
     let limit = p.max_rpm.unwrap_or(f64::INFINITY);

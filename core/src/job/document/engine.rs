@@ -125,7 +125,8 @@ pub struct Electric {
     pub resistance_ohm: f64,
     /// No-load current, A; taken as the same at every voltage and rpm.
     pub no_load_current_a: f64,
-    /// Voltage at which the no-load current was read, V. It only keeps a record of the reading: no figure depends on it.
+    /// Voltage at which the no-load current was read, V. It only keeps a record of the reading: no figure
+    /// depends on it.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub no_load_voltage_v: Option<f64>,
     /// Limit of motor current, A.

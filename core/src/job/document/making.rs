@@ -7,15 +7,15 @@ use serde::{Deserialize, Serialize};
 #[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]
 #[serde(deny_unknown_fields)]
 pub struct Making {
-    /// Point of the chord line, as a share of the chord from the leading edge, that stands on the stacking line;
-    /// without it the centroid of every section stands there.
+    /// Point of the chord line, as a share of the chord from the leading edge, that stands on the stacking
+    /// line; without it the centroid of every section stands there.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub stacking_fraction: Option<f64>,
     /// The stacking line by rising radius; without it straight and square to the axis.
     #[serde(default, skip_serializing_if = "Vec::is_empty")]
     pub stacking_line: Vec<LinePoint>,
-    /// Least thickness of the trailing edge, m, at most 5 % of every station's chord; without it a thousandth of the
-    /// diameter.
+    /// Least thickness of the trailing edge, m, at most 5 % of every station's chord; without it a
+    /// thousandth of the diameter.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub trailing_edge_m: Option<f64>,
     /// Least radius of the leading edge, m; without it that of the section.
@@ -33,7 +33,8 @@ pub struct Making {
     /// Wood left round the blade on every side of the blank, m; without it a five-hundredth of the diameter.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub allowance_m: Option<f64>,
-    /// By how much each lamination is turned about the axis against its neighbour, degrees; without it not at all.
+    /// By how much each lamination is turned about the axis against its neighbour, degrees; without it not
+    /// at all.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub fan_step_deg: Option<f64>,
     /// A standard flange whose bolts the hub is drilled for, in place of the pattern of `wood.hub`.
@@ -51,7 +52,8 @@ pub struct LinePoint {
     /// How far the line runs behind the radius through the axis, against the direction of turning, m.
     #[serde(default)]
     pub sweep_m: f64,
-    /// How far it runs ahead of the plane of the hub, in the direction of flight, m; beside the lean of `wood.rake_deg`.
+    /// How far it runs ahead of the plane of the hub, in the direction of flight, m; beside the lean of
+    /// `wood.rake_deg`.
     #[serde(default)]
     pub rake_m: f64,
 }

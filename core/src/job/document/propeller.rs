@@ -22,7 +22,8 @@ pub struct Propeller {
     /// What blade angles are measured to.
     #[serde(default)]
     pub angle_reference: AngleReference,
-    /// By how much the body behind slows the air at the propeller, as a share of the airspeed; without it not at all.
+    /// By how much the body behind slows the air at the propeller, as a share of the airspeed; without it
+    /// not at all.
     #[serde(default, skip_serializing_if = "Option::is_none")]
     pub blockage: Option<f64>,
     /// Stations from hub to tip.

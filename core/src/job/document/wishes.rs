@@ -89,7 +89,8 @@ pub struct Limits {
     /// Greatest depth of the blade along the axis, m: the thickness of the blank.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub blank_depth_most_m: Option<f64>,
-    /// Least stress margin anywhere on the blade, limit over stress less 1; only where the job names its wood.
+    /// Least stress margin anywhere on the blade, limit over stress less 1; only where the job names its
+    /// wood.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub stress_margin_least: Option<f64>,
 }

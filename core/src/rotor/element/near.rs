@@ -1,9 +1,10 @@
 //! The balance of an element that lies near one already known: at a neighbouring rpm, speed or blade angle.
 //!
-//! Secant steps from the angle of attack of the neighbour lead to a root. Where lift rises steeply the residual rises through one
-//! root only, which is the one that the march from α = 0 would find; farther out the march's own steps see to it that none lies nearer. Whatever
-//! casts doubt on that is left to the march: such a nearer one, a residual that does not rise, a blade angle at which the flow
-//! may be reversed, steps that do not come to an end.
+//! Secant steps from the angle of attack of the neighbour lead to a root. Where lift rises steeply the
+//! residual rises through one root only, which is the one that the march from α = 0 would find; farther out
+//! the march's own steps see to it that none lies nearer. Whatever casts doubt on that is left to the march:
+//! such a nearer one, a residual that does not rise, a blade angle at which the flow may be reversed, steps
+//! that do not come to an end.
 
 use std::f64::consts::FRAC_PI_2;
 
@@ -41,7 +42,8 @@ const SHORT_RAD: f64 = 1e-7;
 const AHEAD: std::ops::Range<f64> = NEAR_ZERO_RAD..FRAC_PI_2;
 
 impl Element<'_> {
-    /// The balance, as [`Element::balance`] gives it to within rounding, found from what `near` tells and kept there for the next.
+    /// The balance, as [`Element::balance`] gives it to within rounding, found from what `near` tells and
+    /// kept there for the next.
     #[must_use]
     pub fn balance_near(&self, near: &mut Near) -> Option<Balance> {
         if let Some((balance, slope)) = self.followed(*near) {
@@ -91,7 +93,8 @@ impl Element<'_> {
         self.surely_ahead() || (self.angle_rad < FRAC_PI_2 && self.section.at(self.angle_rad).cl >= 0.0)
     }
 
-    /// Whether no root has less `|α|` than the one at `phi`: looks beyond where lift is steep, in the march's own steps.
+    /// Whether no root has less `|α|` than the one at `phi`: looks beyond where lift is steep, in the march's
+    /// own steps.
     fn nothing_nearer(&self, phi: f64, flow: &Flow, lookups: &mut u32) -> bool {
         let ((down, up), alpha) = (self.steep_rad(), self.angle_rad - phi);
         let (own, opposite) = if alpha > 0.0 { (up, down) } else { (down, up) };
@@ -100,7 +103,8 @@ impl Element<'_> {
             && self.keeps_sign(alpha, self.angle_rad - opposite, self.angle_rad + alpha, flow, lookups)
     }
 
-    /// Whether the residual has the sign of `alpha` from one inflow angle away from α = 0 to another, as far as they are ahead.
+    /// Whether the residual has the sign of `alpha` from one inflow angle away from α = 0 to another, as far
+    /// as they are ahead.
     fn keeps_sign(&self, alpha: f64, from: f64, to: f64, flow: &Flow, lookups: &mut u32) -> bool {
         let away = |phi: f64| (self.angle_rad - phi).abs();
         let [mut there, to] = [from, to].map(|phi| phi.clamp(AHEAD.start, AHEAD.end));

@@ -120,7 +120,8 @@ fn the_march_passes_over_a_root_that_a_scan_finds_in_one_of_ten_thousand_element
     assert!(count <= 2, "{count}");
 }
 
-/// On tables with all their small waves the two may differ where roots come in pairs closer than a step; that is rare.
+/// On tables with all their small waves the two may differ where roots come in pairs closer than a step; that
+/// is rare.
 #[test]
 fn on_shipped_tables_the_march_and_the_scan_nearly_always_agree() {
     let family = library().family("clark-y", 9.0).unwrap();
@@ -177,8 +178,9 @@ fn on_shipped_tables_a_neighbour_leads_to_the_same_root_in_half_the_lookups() {
     assert!(2 * warm < cold, "{warm} of {cold}");
 }
 
-/// What the residual was made of, put together anew from the balance it led to: momentum theory with drag in both equations, and
-/// CT = 8/9 + (4 F − 40/9) a + (50/9 − 4 F) a² (M. L. Buhl, NREL/TP-500-36834, 2005; from memory) in the windmill brake state.
+/// What the residual was made of, put together anew from the balance it led to: momentum theory with drag in
+/// both equations, and CT = 8/9 + (4 F − 40/9) a + (50/9 − 4 F) a² (M. L. Buhl, NREL/TP-500-36834, 2005; from
+/// memory) in the windmill brake state.
 #[test]
 fn at_every_balance_the_air_takes_up_what_the_blade_gives() {
     let family = plate_polar();
@@ -210,7 +212,8 @@ fn at_every_balance_the_air_takes_up_what_the_blade_gives() {
     assert!(counts.iter().all(|n| *n > 50), "{counts:?}");
 }
 
-/// A blade set to push backwards turns the flow round while the air comes slowly, and brakes it where it comes fast.
+/// A blade set to push backwards turns the flow round while the air comes slowly, and brakes it where it
+/// comes fast.
 #[test]
 fn the_flow_turns_round_up_to_the_speed_at_which_the_blade_holds_it() {
     let family = plate_polar();

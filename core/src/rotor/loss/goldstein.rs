@@ -1,9 +1,11 @@
 //! Goldstein's exact loss at the tip, as a share of Prandtl's.
 //!
-//! S. Goldstein, *On the Vortex Theory of Screw Propellers*, Proc. Roy. Soc. A 123, 1929: the circulation of a lightly loaded propeller whose
-//! wake is rigid helical sheets. Prandtl takes the sheets for flat ones, which is true for fine pitch or many blades; elsewhere his factor is
-//! too large. The share is tabulated (`table`, made by `cargo run --release -p spokeshave-tests --bin goldstein`) over the number of blades, the
-//! pitch of the wake `λ = r/R tan φ` of the station and the place on the blade, and led over by cubics (Catmull, Rom 1974).
+//! S. Goldstein, *On the Vortex Theory of Screw Propellers*, Proc. Roy. Soc. A 123, 1929: the circulation of
+//! a lightly loaded propeller whose wake is rigid helical sheets. Prandtl takes the sheets for flat ones,
+//! which is true for fine pitch or many blades; elsewhere his factor is too large. The share is tabulated
+//! (`table`, made by `cargo run --release -p spokeshave-tests --bin goldstein`) over the number of blades,
+//! the pitch of the wake `λ = r/R tan φ` of the station and the place on the blade, and led over by cubics
+//! (Catmull, Rom 1974).
 
 mod table;
 
@@ -34,7 +36,8 @@ impl Share {
         Self { fraction, at }
     }
 
-    /// The share at an inflow angle given by `|sin φ|`; coarser pitch than the table's is taken as its coarsest.
+    /// The share at an inflow angle given by `|sin φ|`; coarser pitch than the table's is taken as its
+    /// coarsest.
     pub(super) fn at(&self, sin_phi: f64) -> f64 {
         let pitch = self.fraction * sin_phi / (1.0 - sin_phi * sin_phi).max(f64::MIN_POSITIVE).sqrt();
         if pitch < FINEST {

@@ -68,7 +68,8 @@ fn rotation_gives_back_lift_past_stall_and_none_before() {
     assert_eq!(gain(-15.0), 0.0);
 }
 
-/// Looked at in steps of 0.1 degrees over 400 stations of every shipped section, with and without Mach number and delay of stall.
+/// Looked at in steps of 0.1 degrees over 400 stations of every shipped section, with and without Mach number
+/// and delay of stall.
 #[test]
 fn coefficients_nowhere_rise_more_than_the_bound_says() {
     const STEP: f64 = 0.1 * DEG;

@@ -26,8 +26,8 @@ pub(crate) fn with_edge_thickness(outline: &Outline, thickness: f64) -> Result<O
     Ok(thick)
 }
 
-/// Adds to the edge of points that run from the upper edge round `nose` to the lower edge, with the square of the distance
-/// behind `from`. A face stays flat: all goes on the back; without one each side takes half.
+/// Adds to the edge of points that run from the upper edge round `nose` to the lower edge, with the square of
+/// the distance behind `from`. A face stays flat: all goes on the back; without one each side takes half.
 pub(crate) fn thicken(points: &mut [[f64; 2]], nose: usize, from: f64, added: f64, has_face: bool) {
     let shares = if has_face { [1.0, 0.0] } else { [0.5, -0.5] };
     for (k, p) in points.iter_mut().enumerate() {

@@ -23,7 +23,8 @@ pub struct Measures {
     pub area: f64,
     /// Centroid, in chords.
     pub centroid: [f64; 2],
-    /// Second moment about the axis through the centroid parallel to the chord line, in chords to the fourth.
+    /// Second moment about the axis through the centroid parallel to the chord line, in chords to the
+    /// fourth.
     pub i_flat: f64,
     /// Second moment about the axis through the centroid square to the chord line, in chords to the fourth.
     pub i_edge: f64,

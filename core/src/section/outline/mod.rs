@@ -161,8 +161,9 @@ impl Outline {
         edge::with_edge_thickness(self, thickness)
     }
 
-    /// Points of the outline, in chords, at shares of the arc that are the same for every section: `per_side` from the
-    /// upper trailing edge to the nose and as many from the nose, counted in both, to the lower trailing edge.
+    /// Points of the outline, in chords, at shares of the arc that are the same for every section: `per_side`
+    /// from the upper trailing edge to the nose and as many from the nose, counted in both, to the lower
+    /// trailing edge.
     #[must_use]
     pub fn sampled(&self, per_side: usize) -> Vec<[f64; 2]> {
         sample::sampled(self, per_side)

@@ -88,7 +88,8 @@ fn take_counts(blocks: &mut Vec<Vec<Row>>) -> Option<([usize; 2], usize)> {
     let total: usize = blocks.iter().map(Vec::len).sum();
     let (first, line) = *blocks.first()?.first()?;
     let whole = |v: f64| v.fract() == 0.0 && (3.0..1e6).contains(&v);
-    // Lists in other units than the chord also hold whole numbers: a count must be near the length of the list.
+    // Lists in other units than the chord also hold whole numbers: a count must be near the length of the
+    // list.
     let near = (first[0] + first[1] - (total as f64 - 1.0)).abs() <= 3.0;
     if !(whole(first[0]) && whole(first[1]) && near) {
         return None;

@@ -1,4 +1,5 @@
-//! Points of an outline at places that any two outlines have in common, so that one can be led over into another.
+//! Points of an outline at places that any two outlines have in common, so that one can be led over into
+//! another.
 
 use super::Outline;
 use super::measure::nose;

@@ -152,7 +152,8 @@ fn a_blunt_edge_keeps_the_face_the_nose_and_the_greatest_thickness() {
         assert!((blunt.thickness_ratio() - drawn.thickness_ratio()).abs() < 3e-4);
         assert!((blunt.measures().nose_radius / drawn.measures().nose_radius - 1.0).abs() < 0.05);
         assert_eq!(blunt.face().is_some(), drawn.face().is_some());
-        // The middle of the edge rises by half of what was added to the back: the chord line drops at the nose by as much.
+        // The middle of the edge rises by half of what was added to the back: the chord line drops at the
+        // nose by as much.
         if let (Some(a), Some(b)) = (drawn.face_angle_rad(), blunt.face_angle_rad()) {
             let rise = 0.5 * (0.012 - drawn.measures().edge_thickness);
             assert!((a - b - rise).abs() < 1e-4, "{a} {b} {rise}");

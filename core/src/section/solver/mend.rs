@@ -1,8 +1,8 @@
 //! Further attempts at an angle that failed, from solved neighbours on both sides.
 //!
 //! What fails between angles that converge is mostly transition: caught at a node, or running along a side
-//! within a fraction of a degree. Nothing is filled in: a point found here holds the same equations to the same
-//! tolerance.
+//! within a fraction of a degree. Nothing is filled in: a point found here holds the same equations to the
+//! same tolerance.
 
 use super::attempt::{Attempts, Found, HALVINGS, Pace, Solution};
 use super::layer::Layer;

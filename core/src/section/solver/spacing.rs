@@ -32,7 +32,8 @@ pub(super) fn nodes(outline: &Outline, count: usize) -> Vec<[f64; 2]> {
         |mean: f64| (0..SAMPLES).map(|i| 0.5 * (density(mean, i) + density(mean, i + 1)) * step).sum::<f64>();
     let (plain, slope) = (total(0.0), total(1.0) - total(0.0));
     let panels = (count - 1) as f64;
-    // total(mean) = panels * mean  =>  mean = plain / (panels - slope), bounded so that the nose leaves panels elsewhere.
+    // total(mean) = panels * mean  =>  mean = plain / (panels - slope), bounded so that the nose leaves
+    // panels elsewhere.
     let mean = plain / (panels - slope).max(0.4 * panels);
     place(curve, count, step, |i| density(mean, i))
 }

@@ -123,7 +123,8 @@ fn drag_is_never_less_than_that_of_a_plate() {
     assert!(good.count() >= 15);
 }
 
-/// Where transition runs along a flat stretch within half a degree, angles from both sides fail; holding it finds them.
+/// Where transition runs along a flat stretch within half a degree, angles from both sides fail; holding it
+/// finds them.
 #[test]
 fn transition_that_runs_along_a_side_is_found() {
     let section =

@@ -1,13 +1,17 @@
 //! Chord and angle of least induced loss for a job's flight point, section by section.
 //!
-//! Circulation times blades is given by the method; how a station carries it is a choice ([`Lift`]). At low Reynolds numbers the best incidence of a station
-//! asks for more lift and so for less chord, which lowers its Reynolds number and calls for still more lift: there the chord of least drag for the lift it
-//! carries, its Reynolds number going with it, is the better choice. Chord and sections take turns with the flow until they rest. Where the chord meets its least or greatest, the circulation is kept and the lift coefficient follows, up to 90 % of the
-//! section's greatest lift.
+//! Circulation times blades is given by the method; how a station carries it is a choice ([`Lift`]). At low
+//! Reynolds numbers the best incidence of a station asks for more lift and so for less chord, which lowers
+//! its Reynolds number and calls for still more lift: there the chord of least drag for the lift it
+//! carries, its Reynolds number going with it, is the better choice. Chord and sections take turns with the
+//! flow until they rest. Where the chord meets its least or greatest, the circulation is kept and the lift
+//! coefficient follows, up to 90 % of the section's greatest lift.
 //!
-//! The chord of least drag jumps between stations where a section has two tops of lift-to-drag; so that it can be carved, the lift coefficients found are
-//! smoothed along the blade by a cubic, weighted by the load, and the chords follow from them. Stations, sections and thickness ratios are those of the
-//! drawn blade; where its last station lies well inboard of the tip, whose chord would be held to the end, one more near the tip gives the tip its shape.
+//! The chord of least drag jumps between stations where a section has two tops of lift-to-drag; so that it
+//! can be carved, the lift coefficients found are smoothed along the blade by a cubic, weighted by the load,
+//! and the chords follow from them. Stations, sections and thickness ratios are those of the drawn blade;
+//! where its last station lies well inboard of the tip, whose chord would be held to the end, one more near
+//! the tip gives the tip its shape.
 
 mod smooth;
 mod working;
@@ -38,7 +42,8 @@ pub enum Lift {
     Coefficient(f64),
 }
 
-/// What to design. Where nothing is given, rpm and power (in level flight, thrust) are those of the drawn blade at the flight point.
+/// What to design. Where nothing is given, rpm and power (in level flight, thrust) are those of the drawn
+/// blade at the flight point.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
 pub struct LossTask {
     /// Index of the flight point.
@@ -73,7 +78,8 @@ const AT_REST: f64 = 1e-7;
 /// The blade of least induced loss.
 ///
 /// # Errors
-/// No such point, or none with a speed and an answer; figures outside their range; thrust that cannot be had; no convergence.
+/// No such point, or none with a speed and an answer; figures outside their range; thrust that cannot be had;
+/// no convergence.
 pub fn least_loss(rig: &Rig, asked: &LossTask) -> Result<Shaped<LeastLoss>, ShapeError> {
     let at = condition(rig, asked)?;
     let task = task(rig, asked, &at)?;
@@ -201,8 +207,9 @@ fn fraction(task: &Task, radius_m: f64) -> f64 {
     (radius_m / task.radius_m).clamp(task.hub_radius_m / task.radius_m, 1.0)
 }
 
-/// Design and sections taking turns. Where a section's best angle jumps between two tops as its Reynolds number changes, ever smaller steps of the chord
-/// that tells the Reynolds number bring it to rest; chord and lift coefficient given belong together at every pass.
+/// Design and sections taking turns. Where a section's best angle jumps between two tops as its Reynolds
+/// number changes, ever smaller steps of the chord that tells the Reynolds number bring it to rest; chord and
+/// lift coefficient given belong together at every pass.
 fn rested(
     rig: &Rig,
     task: Task,

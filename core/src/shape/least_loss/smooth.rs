@@ -1,7 +1,8 @@
 //! A smooth run through figures along the blade.
 
-/// The weighted least-squares polynomial of a degree through figures, at their own places, by discrete orthogonal polynomials (G. E. Forsythe, J.
-/// SIAM 5, 1957; from memory). All lists are of one length; weights are not below 0.
+/// The weighted least-squares polynomial of a degree through figures, at their own places, by discrete
+/// orthogonal polynomials (G. E. Forsythe, J. SIAM 5, 1957; from memory). All lists are of one length;
+/// weights are not below 0.
 pub(super) fn smoothed(x: &[f64], y: &[f64], weight: &[f64], degree: u32) -> Vec<f64> {
     let dot =
         |a: &[f64], b: &[f64]| -> f64 { a.iter().zip(b).zip(weight).map(|((a, b), w)| w * a * b).sum() };

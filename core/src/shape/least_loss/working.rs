@@ -35,8 +35,8 @@ pub(super) struct Limits {
     pub(super) lift: Lift,
 }
 
-/// How a station works whose chord times lift coefficient (m) is given, its Reynolds number by the chord of the pass before; at a lift
-/// coefficient where one is given.
+/// How a station works whose chord times lift coefficient (m) is given, its Reynolds number by the chord of
+/// the pass before; at a lift coefficient where one is given.
 pub(super) fn works(
     rig: &Rig,
     at: &Condition,
@@ -75,7 +75,8 @@ pub(super) fn works(
     Ok(bounded(&element, unbound, kept / chord, chord < free))
 }
 
-/// The chord of least drag for a chord times lift coefficient (m); `None` where no chord within the limits carries it.
+/// The chord of least drag for a chord times lift coefficient (m); `None` where no chord within the limits
+/// carries it.
 fn least_drag(rig: &Rig, at: &Condition, radius_m: f64, kept_m: f64, limits: &Limits) -> Option<Working> {
     let with = |place: f64| -> Option<Working> {
         let mut ring = rig.rotor.ring(radius_m);

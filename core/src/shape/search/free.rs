@@ -50,13 +50,15 @@ pub(super) fn told(x: &[f64; FREE], held: &[Held]) -> Vec<FreeValue> {
     free(held).into_iter().map(value).collect()
 }
 
-/// The blade of free figures, each from −1 to 1 of its span. Chords go with the diameter, thickness ratios stay.
+/// The blade of free figures, each from −1 to 1 of its span. Chords go with the diameter, thickness ratios
+/// stay.
 pub(super) fn shaped(rig: &Rig, x: &[f64; FREE]) -> Result<Rig, ShapeError> {
     let v: Vec<f64> = x.iter().zip(&SPANS).map(|(x, span)| x.clamp(-1.0, 1.0) * span.half).collect();
     let stations = &rig.job.propeller.stations;
     let inner = stations.first().map_or(0.0, |s| s.radius_fraction);
     let outer = stations.last().map_or(1.0, |s| s.radius_fraction);
-    // Legendre polynomials from −1 at the first station to 1 at the last: each leaves the mean of the others alone.
+    // Legendre polynomials from −1 at the first station to 1 at the last: each leaves the mean of the others
+    // alone.
     let along = |i: usize| 2.0 * (stations[i].radius_fraction - inner) / (outer - inner) - 1.0;
     let bow = |u: f64| 0.5 * (3.0 * u * u - 1.0);
     let third = |u: f64| 0.5 * (5.0 * u * u * u - 3.0 * u);

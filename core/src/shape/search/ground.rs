@@ -183,7 +183,8 @@ impl Ground {
     }
 }
 
-/// Logarithm of the better ratio; with no figure of the drawn blade, of the figure itself, which leaves the order of blades alone.
+/// Logarithm of the better ratio; with no figure of the drawn blade, of the figure itself, which leaves the
+/// order of blades alone.
 fn gain(figure: Figure, drawn: Option<f64>, new: f64) -> f64 {
     if figure == Figure::RateOfClimbMS {
         let old = drawn.unwrap_or(0.0);
@@ -194,8 +195,8 @@ fn gain(figure: Figure, drawn: Option<f64>, new: f64) -> f64 {
     if gain.is_finite() { gain.clamp(NO_ANSWER, 3.0) } else { NO_ANSWER }
 }
 
-/// The limit most in the way and by how much; where there is no answer, why, and the broken limits that have a figure. `None`
-/// where all are kept.
+/// The limit most in the way and by how much; where there is no answer, why, and the broken limits that have
+/// a figure. `None` where all are kept.
 pub(super) fn in_the_way(margins: &[Margin], looks: &[Look]) -> Option<String> {
     let broken = || margins.iter().filter(|m| m.share < -KEPT);
     let worst = broken().min_by(|a, b| a.share.total_cmp(&b.share))?;
@@ -233,7 +234,8 @@ fn senseless(rig: &Rig, point: &FlightPoint, figure: Figure) -> Option<&'static 
     }
 }
 
-/// What a flight point is for by its setting: top speed by its airspeed, level flight by efficiency, hover by power, all else by climb or thrust.
+/// What a flight point is for by its setting: top speed by its airspeed, level flight by efficiency, hover by
+/// power, all else by climb or thrust.
 #[must_use]
 pub fn usual_aims(rig: &Rig) -> Vec<Aim> {
     let of = |point: &FlightPoint| {

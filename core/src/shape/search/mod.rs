@@ -1,9 +1,11 @@
 //! Search for the blade of greatest weighted gain over flight points, within limits.
 //!
-//! Free figures are few and smooth: diameter, pitch, and two or three terms of twist and of chord along the blade, each on top of the drawn blade. Method:
-//! M. J. D. Powell's COBYLA, 1994 (linear models of aim and limits over a simplex, no derivatives), begun again from its best until that gains
-//! nothing. A motor's current limit puts a corner into every figure at full throttle, on which linear models come to rest too early: first rounds go
-//! with that corner rounded off, the last with the limit itself. Same input, same output. Strength is not judged: the spans keep chords near the drawn ones.
+//! Free figures are few and smooth: diameter, pitch, and two or three terms of twist and of chord along the
+//! blade, each on top of the drawn blade. Method: M. J. D. Powell's COBYLA, 1994 (linear models of aim and
+//! limits over a simplex, no derivatives), begun again from its best until that gains nothing. A motor's
+//! current limit puts a corner into every figure at full throttle, on which linear models come to rest too
+//! early: first rounds go with that corner rounded off, the last with the limit itself. Same input, same
+//! output. Strength is not judged: the spans keep chords near the drawn ones.
 
 mod free;
 mod ground;
@@ -70,7 +72,8 @@ pub type Listener<'l> = dyn FnMut(&Progress) -> ControlFlow<()> + 'l;
 /// Looks for the blade of greatest gain; `progress` is told after every trial and may call the search off.
 ///
 /// # Errors
-/// No aim, one that its flight point does not have, or a weight that is not above 0; no blade found within limits, with the limit that is most in the way.
+/// No aim, one that its flight point does not have, or a weight that is not above 0; no blade found within
+/// limits, with the limit that is most in the way.
 pub fn search(rig: &Rig, wish: &Wish, progress: &mut Listener) -> Result<Shaped<Search>, ShapeError> {
     let ground = Ground::new(rig, wish)?;
     let free = free(&wish.held);

@@ -7,7 +7,8 @@ use crate::result::{Limit, Margin};
 use crate::rig::Rig;
 use crate::shape::ShapeError;
 
-/// Refuses limits of rpm outside what any blade can turn at a flight point; `standing` is that of the standing limit.
+/// Refuses limits of rpm outside what any blade can turn at a flight point; `standing` is that of the
+/// standing limit.
 pub(super) fn check_rpm(
     rig: &Rig,
     limits: &Limits,

@@ -10,7 +10,8 @@ use super::ground::{Ground, Trial};
 use super::{Listener, Progress, Wish};
 use crate::result::Stopped;
 
-/// Shares over which a current limit is rounded off, one stage after the other, all by few elements. The last stage goes by the job as it is.
+/// Shares over which a current limit is rounded off, one stage after the other, all by few elements. The last
+/// stage goes by the job as it is.
 const ROUNDED: [f64; 2] = [0.1, 0.02];
 /// First steps of the rounds of a stage, by turns, in spans; those of the last stage.
 const FIRST_STEPS: [f64; 2] = [0.25, 0.08];

@@ -1,8 +1,10 @@
 //! Bending out of the plane of rotation and in it: deflection under load, and natural frequencies.
 //!
-//! Hermite's cubic beam elements (Euler and Bernoulli's beam; O. C. Zienkiewicz, *The Finite Element Method*; from memory), root clamped, tip free:
-//! `K = ∫ EI w″² + N w′² dx`, in the plane of rotation less `Ω² ∫ m w² dx`, `M = ∫ m w² dx`, `N(r) = Ω² ∫_r^R m x dx`. The stiffening of a turning
-//! blade is that of R. V. Southwell and F. Gough, ARC R&M 766, 1921: `ω² = ω0² + Ks Ω²`. Left out: shear, rotary inertia, Coriolis' force.
+//! Hermite's cubic beam elements (Euler and Bernoulli's beam; O. C. Zienkiewicz, *The Finite Element Method*;
+//! from memory), root clamped, tip free: `K = ∫ EI w″² + N w′² dx`, in the plane of rotation less `Ω² ∫ m w²
+//! dx`, `M = ∫ m w² dx`, `N(r) = Ω² ∫_r^R m x dx`. The stiffening of a turning blade is that of R. V.
+//! Southwell and F. Gough, ARC R&M 766, 1921: `ω² = ω0² + Ks Ω²`. Left out: shear, rotary inertia, Coriolis'
+//! force.
 
 use super::banded::Banded;
 use super::figures::{ELEMENTS, Tension, at, element_m, points, slope};
@@ -17,7 +19,8 @@ pub struct Bending<'a> {
     pub mass_kg_m: &'a [f64],
     /// Bending stiffness out of the plane of rotation, N m².
     pub out_n_m2: &'a [f64],
-    /// Bending stiffness in the plane of rotation, and what couples the two, N m²; `None` for out of the plane alone.
+    /// Bending stiffness in the plane of rotation, and what couples the two, N m²; `None` for out of the
+    /// plane alone.
     pub in_n_m2: Option<[&'a [f64]; 2]>,
     /// Speed of rotation, rad/s.
     pub rotation_rad_s: f64,
@@ -42,8 +45,10 @@ fn cubics(s: f64) -> ([f64; 4], [f64; 4], [f64; 4]) {
 }
 
 impl Bending<'_> {
-    /// Deflection out of the plane of rotation and in it, m, at the radii, under loads per metre, N/m, and from offsets of the unloaded beam, m, in the same two
-    /// directions: tension pulls those straight, `−∫ N w0′ w′ + Ω² m w0 w dx` (the last in the plane of rotation alone). `None` where the beam does not stand.
+    /// Deflection out of the plane of rotation and in it, m, at the radii, under loads per metre, N/m, and
+    /// from offsets of the unloaded beam, m, in the same two directions: tension pulls those straight,
+    /// `−∫ N w0′ w′ + Ω² m w0 w dx` (the last in the plane of rotation alone). `None` where the beam does not
+    /// stand.
     #[must_use]
     pub fn deflection_m(&self, loads_n_m: [&[f64]; 2], offsets_m: [&[f64]; 2]) -> Option<Vec<[f64; 2]>> {
         let (stiffness, _) = self.matrices();
@@ -91,7 +96,8 @@ impl Bending<'_> {
         2 * self.planes() * ELEMENTS
     }
 
-    /// Index of an element's unknown in a plane: deflection and slope at its near end (0, 1) and far end (2, 3); none at the clamped root.
+    /// Index of an element's unknown in a plane: deflection and slope at its near end (0, 1) and far end (2,
+    /// 3); none at the clamped root.
     fn unknown(&self, element: usize, plane: usize, k: usize) -> Option<usize> {
         let node = (element + k / 2).checked_sub(1)?;
         Some((node * self.planes() + plane) * 2 + k % 2)

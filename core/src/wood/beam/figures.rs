@@ -50,7 +50,8 @@ impl<'a> Tension<'a> {
     }
 }
 
-/// Gauss points of the beam's elements: index of the element, place along it from 0 to 1, radius (m) and weight (m).
+/// Gauss points of the beam's elements: index of the element, place along it from 0 to 1, radius (m) and
+/// weight (m).
 pub(super) fn points(radii_m: &[f64]) -> impl Iterator<Item = (usize, f64, f64, f64)> {
     let (root, length) = (radii_m[0], element_m(radii_m));
     (0..ELEMENTS).flat_map(move |e| {

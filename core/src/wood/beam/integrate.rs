@@ -30,7 +30,8 @@ pub fn outboard(radii_m: &[f64], q: &[f64]) -> Vec<f64> {
     at
 }
 
-/// Tension `N(r) = Ω² ∫_r^R m x dx`, N, at each radius, of a mass per metre `m`, kg/m, that turns at Ω, rad/s.
+/// Tension `N(r) = Ω² ∫_r^R m x dx`, N, at each radius, of a mass per metre `m`, kg/m, that turns at Ω,
+/// rad/s.
 #[must_use]
 pub fn tension_n(radii_m: &[f64], mass_kg_m: &[f64], rotation_rad_s: f64) -> Vec<f64> {
     let mut sum = 0.0;
@@ -42,7 +43,8 @@ pub fn tension_n(radii_m: &[f64], mass_kg_m: &[f64], rotation_rad_s: f64) -> Vec
     outboard
 }
 
-/// Bending moment `M(r) = ∫_r^R q (x − r) dx`, N m, at each radius, of a load per metre `q`, N/m, across the beam.
+/// Bending moment `M(r) = ∫_r^R q (x − r) dx`, N m, at each radius, of a load per metre `q`, N/m, across the
+/// beam.
 #[must_use]
 pub fn bending_n_m(radii_m: &[f64], load_n_m: &[f64]) -> Vec<f64> {
     let (mut force, mut moment) = (0.0, 0.0);

@@ -7,9 +7,11 @@ const STEPS: usize = 400;
 /// Change of `ω²` at which a mode is taken as found.
 const SETTLED: f64 = 1e-13;
 
-/// The lowest modes: ω, rad/s, rising, and the shape with `xᵀ M x = 1`. `None` where the stiffness is not positive definite.
+/// The lowest modes: ω, rad/s, rising, and the shape with `xᵀ M x = 1`. `None` where the stiffness is not
+/// positive definite.
 ///
-/// Each mode is found square to those before it (inverse iteration with deflation: J. H. Wilkinson, *The Algebraic Eigenvalue Problem*, 1965).
+/// Each mode is found square to those before it (inverse iteration with deflation: J. H. Wilkinson, *The
+/// Algebraic Eigenvalue Problem*, 1965).
 pub(super) fn lowest(
     stiffness: &Banded,
     mass: &Banded,

@@ -1,8 +1,10 @@
-//! A beam whose centroids stand beside the radius through the axis: what centrifugal force does by those offsets.
+//! A beam whose centroids stand beside the radius through the axis: what centrifugal force does by those
+//! offsets.
 //!
-//! Every piece of the beam is pulled outward along its own radius. With w out of the plane of rotation and u in it (against the turning), equilibrium of
-//! the moments about the centroid at r gives what is written at each function (statics; no source needed). A line that leans straight from the axis
-//! neither twists nor, in the plane of rotation, bends.
+//! Every piece of the beam is pulled outward along its own radius. With w out of the plane of rotation and u
+//! in it (against the turning), equilibrium of the moments about the centroid at r gives what is written at
+//! each function (statics; no source needed). A line that leans straight from the axis neither twists nor, in
+//! the plane of rotation, bends.
 
 use super::integrate::{bending_n_m, outboard, tension_n};
 
@@ -37,7 +39,8 @@ impl Offset<'_> {
         ]
     }
 
-    /// Forces across the line, N, that centrifugal force takes off forward and against the turning: `N w′` and `N u′ − Ω² ∫ m u dx`.
+    /// Forces across the line, N, that centrifugal force takes off forward and against the turning: `N w′`
+    /// and `N u′ − Ω² ∫ m u dx`.
     #[must_use]
     pub fn relief_n(&self) -> [Vec<f64>; 2] {
         let tension = tension_n(self.radii_m, self.mass_kg_m, self.rotation_rad_s);
@@ -48,9 +51,10 @@ impl Offset<'_> {
         [each(&|i| tension[i] * forward[i]), each(&|i| tension[i] * against[i] - square * outward[i])]
     }
 
-    /// Twisting moment about the line, N m, towards coarser pitch, at the radii, of loads per metre, N/m, forward and against the turning and of centrifugal
-    /// force: the moment of all forces outboard about the line's tangent,
-    /// `−∫ (u(x) − u(r)) f dx + ∫ (w(x) − w(r)) (q + Ω² m u) dx + u′ M − w′ Q` with f and q the loads, M and Q the bending moments.
+    /// Twisting moment about the line, N m, towards coarser pitch, at the radii, of loads per metre, N/m,
+    /// forward and against the turning and of centrifugal force: the moment of all forces outboard about
+    /// the line's tangent, `−∫ (u(x) − u(r)) f dx + ∫ (w(x) − w(r)) (q + Ω² m u) dx + u′ M − w′ Q` with f
+    /// and q the loads, M and Q the bending moments.
     #[must_use]
     pub fn twisting_n_m(&self, forward_n_m: &[f64], against_n_m: &[f64]) -> Vec<f64> {
         let (r, square) = (self.radii_m, self.rotation_rad_s.powi(2));
@@ -121,8 +125,9 @@ mod tests {
         Offset { radii_m: r, mass_kg_m: m, rotation_rad_s: 10.0, forward_m: w, against_m: u }
     }
 
-    /// Closed forms of an even beam of mass m. Leaning straight, `w = λ x`: `λ Ω² m ∫ x (x − r) dx`. Curved, `w = k (x − a)²`:
-    /// `Ω² m k ∫ x ((x − a)² − (r − a)²) dx`. Standing aside by c: in the plane of rotation `−Ω² m c (R − r)²/2`.
+    /// Closed forms of an even beam of mass m. Leaning straight, `w = λ x`: `λ Ω² m ∫ x (x − r) dx`. Curved,
+    /// `w = k (x − a)²`: `Ω² m k ∫ x ((x − a)² − (r − a)²) dx`. Standing aside by c: in the plane of
+    /// rotation `−Ω² m c (R − r)²/2`.
     #[test]
     fn relief_of_an_even_beam_is_that_of_the_closed_forms() {
         let (r, m, none) = (radii(), vec![2.0; N], vec![0.0; N]);
@@ -162,8 +167,8 @@ mod tests {
         all_none("leaning", leaning.twisting_n_m(&f, &q), 1e-4);
     }
 
-    /// A tip that is swept back turns finer under thrust: lift behind the line lowers the leading edge. Even load f, `u = k (x − r0)²` at the root:
-    /// `−f k L³/3`.
+    /// A tip that is swept back turns finer under thrust: lift behind the line lowers the leading edge. Even
+    /// load f, `u = k (x − r0)²` at the root: `−f k L³/3`.
     #[test]
     fn lift_on_a_swept_tip_turns_the_blade_finer() {
         let (r, m, none) = (radii(), vec![0.0; N], vec![0.0; N]);

@@ -63,7 +63,8 @@ fn deflection_under_an_even_load_is_that_of_the_beam_tables() {
     assert!(turning < 0.7 * tip[0]);
 }
 
-/// A beam without stiffness of its own, turning, is a string: whatever its offset, it ends on the radius through its root.
+/// A beam without stiffness of its own, turning, is a string: whatever its offset, it ends on the radius
+/// through its root.
 #[test]
 fn a_soft_beam_is_pulled_straight() {
     let (r, one, none) = (radii(0.3, 2.3), even(), vec![0.0; N]);
@@ -89,8 +90,8 @@ fn tension_and_bending_of_an_even_beam() {
     near("inertia", second_moment(&r, &m), 2.0 / 3.0 * (1.728 - 0.008), 1e-12);
 }
 
-/// Even bar: `ω = π/2 sqrt(G J/i)/L`, tip twist `½ τ L²/(G J)` (standard tables); turning, held by `c = i Ω²` as a thin section at no angle is,
-/// `ω² = ω0² + Ω²` but for the tension.
+/// Even bar: `ω = π/2 sqrt(G J/i)/L`, tip twist `½ τ L²/(G J)` (standard tables); turning, held by `c = i Ω²`
+/// as a thin section at no angle is, `ω² = ω0² + Ω²` but for the tension.
 #[test]
 fn twist_and_frequency_of_an_even_bar() {
     let (r, one) = (radii(0.0, 2.0), even());

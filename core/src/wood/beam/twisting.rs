@@ -1,7 +1,8 @@
 //! Twisting: angle under load, and natural frequencies.
 //!
-//! Straight elements: `K = ∫ (G J + N kA²) φ′² + c φ² dx`, `M = ∫ i φ² dx`. `N kA²`, with `kA² = Ip/A`, is what tension adds to a twisting bar, and
-//! `−∫ N kA² β′ φ′ dx` how it untwists a bar of angle β(r) (J. C. Houbolt and G. W. Brooks, NACA Report 1346, 1958; from memory). `c` is how much the centrifugal
+//! Straight elements: `K = ∫ (G J + N kA²) φ′² + c φ² dx`, `M = ∫ i φ² dx`. `N kA²`, with `kA² = Ip/A`, is
+//! what tension adds to a twisting bar, and `−∫ N kA² β′ φ′ dx` how it untwists a bar of angle β(r) (J. C.
+//! Houbolt and G. W. Brooks, NACA Report 1346, 1958; from memory). `c` is how much the centrifugal
 //! twisting moment grows with the angle. Left out: warping, coupling with bending.
 
 use super::banded::Banded;
@@ -26,8 +27,8 @@ pub struct Twisting<'a> {
 }
 
 impl Twisting<'_> {
-    /// Twist at the radii, rad, under a twisting moment per metre, N m/m, a twisting moment carried besides, N m, and the tension on a bar of angle
-    /// `angle_rad`. `None` where the bar does not stand.
+    /// Twist at the radii, rad, under a twisting moment per metre, N m/m, a twisting moment carried besides,
+    /// N m, and the tension on a bar of angle `angle_rad`. `None` where the bar does not stand.
     #[must_use]
     pub fn twist_rad(&self, moment_n: &[f64], carried_n_m: &[f64], angle_rad: &[f64]) -> Option<Vec<f64>> {
         let (stiffness, _) = self.matrices();

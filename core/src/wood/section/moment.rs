@@ -5,8 +5,9 @@ use crate::section::outline::{interpolate, sides};
 /// Steps along the chord, evenly in the angle θ with `x = (1 − cos θ)/2`.
 const STEPS: u32 = 200;
 
-/// Moment coefficient about the quarter chord, nose up positive: `−½ ∫ z′ (cos θ − cos 2θ) dθ` over the mean line z
-/// (H. Glauert, *The Elements of Aerofoil and Airscrew Theory*, 1926). Before the stall; real sections have some tenths less.
+/// Moment coefficient about the quarter chord, nose up positive: `−½ ∫ z′ (cos θ − cos 2θ) dθ` over the mean
+/// line z (H. Glauert, *The Elements of Aerofoil and Airscrew Theory*, 1926). Before the stall; real sections
+/// have some tenths less.
 pub(super) fn quarter_chord(points: &[[f64; 2]]) -> f64 {
     let (upper, lower) = sides(points);
     let mean = |x: f64| 0.5 * (interpolate(&upper, x) + interpolate(&lower, x));

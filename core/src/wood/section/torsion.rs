@@ -1,9 +1,10 @@
 //! Torsion constant of a solid section.
 //!
-//! Method: Prandtl's stress function, `∇²φ = −2`, φ = 0 on the rim, `J = 2 ∫ φ dA`, in the form of L. V. Kantorovich and V. I. Krylov,
-//! *Approximate Methods of Higher Analysis*, 1958, chapter IV: `φ = (h² − (y − m)²) f(x)` with the half thickness h and the mean line m, where f
-//! makes the energy least. Exact for ellipses; for slender sections within a few parts in a thousand, always on the low side. f by straight pieces on a
-//! cosine spacing, which takes the square root out of the nose.
+//! Method: Prandtl's stress function, `∇²φ = −2`, φ = 0 on the rim, `J = 2 ∫ φ dA`, in the form of L. V.
+//! Kantorovich and V. I. Krylov, *Approximate Methods of Higher Analysis*, 1958, chapter IV: `φ = (h² − (y −
+//! m)²) f(x)` with the half thickness h and the mean line m, where f makes the energy least. Exact for
+//! ellipses; for slender sections within a few parts in a thousand, always on the low side. f by straight
+//! pieces on a cosine spacing, which takes the square root out of the nose.
 
 use crate::section::outline::{interpolate, sides};
 
@@ -33,7 +34,8 @@ pub(super) fn constant(points: &[[f64; 2]]) -> f64 {
     f.iter().zip(&load).map(|(f, l)| f * l).sum()
 }
 
-/// Stiffness of a piece (left with left, left with right, right with right) and its load on each end, at its middle.
+/// Stiffness of a piece (left with left, left with right, right with right) and its load on each end, at its
+/// middle.
 fn piece(a: [f64; 3], b: [f64; 3]) -> [f64; 4] {
     let width = b[0] - a[0];
     let h = 0.5 * (a[1] + b[1]);

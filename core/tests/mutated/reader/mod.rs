@@ -1,4 +1,5 @@
-//! What is done with a text of each kind. Only panics, hangs and figures that are none are faults: a text may be refused, in words.
+//! What is done with a text of each kind. Only panics, hangs and figures that are none are faults: a text may
+//! be refused, in words.
 
 pub(crate) mod job;
 pub(crate) mod outline;

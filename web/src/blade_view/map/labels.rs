@@ -56,7 +56,8 @@ pub(super) fn label_levels(
     labels
 }
 
-/// The middle of the largest open place inside a part of the map for a word of half width `half_px`, and takes it.
+/// The middle of the largest open place inside a part of the map for a word of half width `half_px`, and
+/// takes it.
 pub(super) fn roomiest(
     map: &DepartureMap,
     frame: &Frame,

@@ -46,8 +46,8 @@ pub(super) struct Fill {
 }
 
 impl Layers {
-    /// The layers of a map. Labels keep clear of the flight points, at the pixels `marks` along, and stand between the
-    /// lines of the stations, at the pixels `levels` down, where they can.
+    /// The layers of a map. Labels keep clear of the flight points, at the pixels `marks` along, and stand
+    /// between the lines of the stations, at the pixels `levels` down, where they can.
     pub(super) fn new(map: &DepartureMap, frame: &Frame, marks: &[f64], levels: &[f64]) -> Option<Self> {
         let departure = field(map, frame, |c| c.departure_deg)?;
         let rings: Vec<Vec<Ring>> = BREAKS_DEG.iter().map(|b| departure.rings(*b)).collect();

@@ -1,4 +1,5 @@
-//! The flight points on the map: each a vertical line at the airspeed where the blade makes its advance per turn.
+//! The flight points on the map: each a vertical line at the airspeed where the blade makes its advance per
+//! turn.
 
 use super::frame::Frame;
 use super::{DepartureChartProps, FlightMark};

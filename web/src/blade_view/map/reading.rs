@@ -20,8 +20,8 @@ pub(super) struct ReadingProps {
     pub(super) on_radius: Callback<f64>,
 }
 
-/// A pane over the map: shows the figures under the pointer, and a click chooses a radius. Only the pane itself
-/// is drawn again when the pointer moves.
+/// A pane over the map: shows the figures under the pointer, and a click chooses a radius. Only the pane
+/// itself is drawn again when the pointer moves.
 #[component]
 pub(super) fn Reading(props: &ReadingProps) -> Html {
     let pointer = use_state_eq(|| None::<[f64; 2]>);

@@ -38,7 +38,8 @@ pub(super) fn options(layout: &Layout, props: &BladeRackProps) -> Html {
     others.chain((props.selected < radii.len()).then_some(props.selected)).map(option).collect()
 }
 
-/// From the balloon over the blade to the tag; for the chosen station on to the edge, where the map takes it up.
+/// From the balloon over the blade to the tag; for the chosen station on to the edge, where the map takes it
+/// up.
 fn cut(
     layout: &Layout,
     props: &BladeRackProps,

@@ -1,4 +1,5 @@
-//! An upright line that can be moved along the chart: by the pointer, by keys, and as a reader of the screen hears it.
+//! An upright line that can be moved along the chart: by the pointer, by keys, and as a reader of the screen
+//! hears it.
 
 use web_sys::Element;
 use yew::prelude::*;

@@ -138,7 +138,8 @@ fn limit_name(layout: &Layout, limit: &super::Limit, clear: &mut Clear) -> Html 
     text([x, y], limit.words.clone())
 }
 
-/// Beside its curve, just above or under, where there is most room; none where the name would lie on another curve.
+/// Beside its curve, just above or under, where there is most room; none where the name would lie on another
+/// curve.
 fn curve_name(layout: &Layout, series: &Series, clear: &mut Clear) -> Option<Html> {
     if series.name.is_empty() {
         return None;

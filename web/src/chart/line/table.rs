@@ -8,7 +8,8 @@ use yew::AttrValue;
 /// Most rows of a table.
 const MOST: usize = 25;
 
-/// One row for each place along, a curve without a name under the chart's title; curves given at other places are read between their points.
+/// One row for each place along, a curve without a name under the chart's title; curves given at other places
+/// are read between their points.
 pub(super) fn table(title: &str, x: &Axis, y: &Axis, series: &[Series]) -> Table {
     let places: Vec<f64> = series.first().map_or_else(Vec::new, |s| s.points.iter().map(|p| p[0]).collect());
     let step = places.len().div_ceil(MOST).max(1);

@@ -130,7 +130,8 @@ impl FuelBy {
         if piston.bsfc_by_load.is_empty() { Self::OneFigure } else { Self::Load }
     }
 
-    /// Gives the consumption this way. From one figure come two rows of it; from rows the one at the highest load.
+    /// Gives the consumption this way. From one figure come two rows of it; from rows the one at the highest
+    /// load.
     fn apply(self, piston: &mut Piston) {
         const STARTED_KG_PER_KWH: f64 = 0.3;
         match self {

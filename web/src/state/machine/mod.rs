@@ -15,7 +15,8 @@ pub use wood::{WoodChoice, WoodFigure, species_of, wood_of};
 
 use spokeshave::job::{DEMOS, Job};
 
-/// What an example has, to start from: of those that have one, the example whose propeller is nearest in size.
+/// What an example has, to start from: of those that have one, the example whose propeller is nearest in
+/// size.
 fn example_of<T>(job: &Job, part: impl Fn(Job) -> Option<T>) -> Option<T> {
     let size = |other: &Job| (other.propeller.diameter_m / job.propeller.diameter_m).ln().abs();
     let examples = DEMOS.iter().filter_map(|demo| Job::from_json(demo.json).ok());

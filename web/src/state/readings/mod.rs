@@ -1,4 +1,5 @@
-//! What was measured on the carved blades and read in ground runs and flights: figures to type, choices to make.
+//! What was measured on the carved blades and read in ground runs and flights: figures to type, choices to
+//! make.
 
 mod blade;
 mod choice;

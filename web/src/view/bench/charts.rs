@@ -35,7 +35,8 @@ fn stress(sheet: &Strength, units: Units) -> Html {
         curve("compression", Stroke::Dashed, |s| s.compression_pa),
         curve("by rotation alone", Stroke::Dotted, |s| s.axial_pa),
     ];
-    // Between the limits one kind of stress is past its own and the other is not: hatched is what is past both.
+    // Between the limits one kind of stress is past its own and the other is not: hatched is what is past
+    // both.
     let m = &sheet.material;
     let most = m.tension_limit_pa.max(m.compression_limit_pa);
     let limit = |name: &str, pa: f64| Limit {

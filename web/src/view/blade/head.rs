@@ -58,7 +58,8 @@ pub fn point_class(selected: bool) -> &'static str {
     if selected { "departure-column now" } else { "departure-column" }
 }
 
-/// Names short enough for narrow columns: a telling word of each, or, where two would read the same, the last letters.
+/// Names short enough for narrow columns: a telling word of each, or, where two would read the same, the last
+/// letters.
 fn shortened(names: &[&str]) -> Vec<String> {
     let words: Vec<String> = names.iter().map(|name| short(name)).collect();
     let alike = |i: usize| words.iter().filter(|w| **w == words[i]).count() > 1;

@@ -23,7 +23,8 @@ pub(super) struct ReadingsSheetProps {
 #[component]
 pub(super) fn ReadingsSheet(props: &ReadingsSheetProps) -> Html {
     let act = use_act();
-    // Not switched off when nothing is left to take out: that would take the focus away from the button just pressed.
+    // Not switched off when nothing is left to take out: that would take the focus away from the button just
+    // pressed.
     let none = props.state.job().carved.is_none();
     let clear = if none { Callback::noop() } else { choose(&act, |_: MouseEvent| CarvedChoice::Clear) };
     let take = {

@@ -25,7 +25,8 @@ use worth::Worth;
 pub struct FitPanelProps {
     /// The state.
     pub state: Seen,
-    /// The speed range in the air of the flight point selected; may be a frame old, not there before it is worked out.
+    /// The speed range in the air of the flight point selected; may be a frame old, not there before it is
+    /// worked out.
     pub envelope: Option<Rc<Option<Envelope>>>,
     /// Every flight point worked out; may be a frame old.
     pub points: Vec<Rc<Option<PointResult>>>,

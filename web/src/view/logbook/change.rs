@@ -72,7 +72,8 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
         props.state.job().flight_points.iter().map(|p| AttrValue::from(p.name.clone())).collect::<Vec<_>>();
     let quantity = quantity(now.speed);
     let asked_of_wood = matches!(&now.answer, Some(Ok(changes)) if changes.iter().any(|c| c.plan.is_some()));
-    // Worked out once for each job: the panel of the carved blades, which has it too, may never have been open.
+    // Worked out once for each job: the panel of the carved blades, which has it too, may never have been
+    // open.
     let before = use_memo((props.rig.clone(), asked_of_wood), |(rig, asked)| {
         rig.as_ref().filter(|_| *asked).and_then(|rig| analyse(&rig.0).ok())
     });

@@ -8,7 +8,8 @@ use crate::state::{Field, LogFigure, LogbookChoice};
 use crate::view::form::{Entry, Message, Shown, Switch};
 use crate::view::{Act, Seen, onward, use_act};
 
-/// What is asked of a reading: what the engine draws is fuel or current, and the other only where it was read all the same.
+/// What is asked of a reading: what the engine draws is fuel or current, and the other only where it was read
+/// all the same.
 fn columns(state: &Seen) -> Vec<LogFigure> {
     let all = state.job().logbook.iter().flat_map(|l| &l.readings);
     let (fuel, current) = all.fold((false, false), |(fuel, current), r| {

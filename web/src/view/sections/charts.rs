@@ -15,7 +15,8 @@ pub(super) struct ChartsProps {
     pub(super) curves: Rc<Vec<SectionCurve>>,
 }
 
-/// Drag is shown up to this many times that of the middle curve at its best, so that the working range is readable.
+/// Drag is shown up to this many times that of the middle curve at its best, so that the working range is
+/// readable.
 const DRAG_SHOWN: f64 = 3.0;
 
 /// Three charts and the best of each curve.

@@ -1,4 +1,5 @@
-//! Where to be careful: what a degree and a millimetre cost along the blade, on one radius axis, and what errors together come to.
+//! Where to be careful: what a degree and a millimetre cost along the blade, on one radius axis, and what
+//! errors together come to.
 
 use std::rc::Rc;
 

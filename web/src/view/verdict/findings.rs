@@ -38,7 +38,8 @@ struct Worst<'a> {
     more: usize,
 }
 
-/// The limits that are broken, each once. Those without a figure have a sentence of their own at the flight point.
+/// The limits that are broken, each once. Those without a figure have a sentence of their own at the flight
+/// point.
 fn worst(margins: &[Margin]) -> Vec<Worst<'_>> {
     let mut all: Vec<Worst> = Vec::new();
     for margin in margins.iter().filter(|m| m.share < 0.0 && m.found.is_some()) {

@@ -1,4 +1,5 @@
-//! From the blade to the bench: the solid turning, the blank in three views, every sheet of paper, files to take away.
+//! From the blade to the bench: the solid turning, the blank in three views, every sheet of paper, files to
+//! take away.
 
 pub(super) mod files;
 mod form;
@@ -29,7 +30,8 @@ pub struct WorkshopProps {
     pub number: usize,
     /// The job made ready; may be a frame old.
     pub rig: Option<RigRef>,
-    /// The state: how the blade is made, the unit of the lengths written on paper, the flight point selected.
+    /// The state: how the blade is made, the unit of the lengths written on paper, the flight point
+    /// selected.
     pub state: Seen,
 }
 
@@ -47,7 +49,8 @@ impl PartialEq for Made {
 #[component]
 pub fn Workshop(props: &WorkshopProps) -> Html {
     let open = use_state_eq(|| false);
-    // What to take off carved blades is planned for the flight point selected; nothing else of the bench depends on it.
+    // What to take off carved blades is planned for the flight point selected; nothing else of the bench
+    // depends on it.
     let point = props.state.job().carved.as_ref().map(|_| props.state.point);
     let made = use_memo((props.rig.clone(), *open, point), |(rig, open, point)| {
         let rig = rig.as_ref().filter(|_| *open)?;

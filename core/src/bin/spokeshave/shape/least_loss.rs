@@ -23,7 +23,8 @@ pub(crate) struct Args {
     /// Propeller rpm; without it the drawn blade's
     #[arg(long)]
     rpm: Option<f64>,
-    /// The same lift coefficient at every station; without it each station has the chord of least drag for its lift
+    /// The same lift coefficient at every station; without it each station has the chord of least drag for
+    /// its lift
     #[arg(long)]
     cl: Option<f64>,
     /// Each station at its best incidence for its own Reynolds number

@@ -17,8 +17,8 @@ use crate::table::{figure, signed, table};
 
 #[derive(clap::Args)]
 pub(crate) struct Args {
-    /// What counts: efficiency, speed, climb, take-off, endurance, power, thrust or noise at a flight point; again for more.
-    /// Without it what the job wishes for, or each flight point by what it is for
+    /// What counts: efficiency, speed, climb, take-off, endurance, power, thrust or noise at a flight point;
+    /// again for more. Without it what the job wishes for, or each flight point by what it is for
     #[arg(long, value_name = "POINT:FIGURE[=WEIGHT]")]
     aim: Vec<String>,
     #[command(flatten)]
@@ -26,7 +26,8 @@ pub(crate) struct Args {
     /// What stays as drawn: diameter, pitch, twist or chord; again for more
     #[arg(long, value_name = "WHAT", value_parser = held)]
     hold: Vec<Held>,
-    /// Where the free figures start, each from -1 to 1 of its span, separated by commas; at the drawn blade without it
+    /// Where the free figures start, each from -1 to 1 of its span, separated by commas; at the drawn blade
+    /// without it
     #[arg(long, value_name = "X,X,…", allow_hyphen_values = true)]
     start: Option<String>,
     /// Most blades to try

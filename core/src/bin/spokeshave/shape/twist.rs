@@ -13,7 +13,8 @@ pub(crate) struct Args {
     /// A flight point that counts, with its weight where several do; the first of the job without it
     #[arg(long, value_name = "NAME[=WEIGHT]")]
     point: Vec<String>,
-    /// Along several flight points, make the weighted loss of lift-to-drag least rather than the weighted squares of the departures
+    /// Along several flight points, make the weighted loss of lift-to-drag least rather than the weighted
+    /// squares of the departures
     #[arg(long)]
     by_loss: bool,
     #[command(flatten)]

@@ -1,5 +1,5 @@
-//! Goldstein's factor over Prandtl's times 10,000: for 1, 2, … blades, at `r/R` = 1, 0.9, …, at each pitch of the wake.
-//! Written by `cargo run --release -p spokeshave-tests --bin goldstein`.
+//! Goldstein's factor over Prandtl's times 10,000: for 1, 2, … blades, at `r/R` = 1, 0.9, …, at each pitch of
+//! the wake. Written by `cargo run --release -p spokeshave-tests --bin goldstein`.
 
 use super::{MOST_BLADES, PITCHES, PLACES};
 

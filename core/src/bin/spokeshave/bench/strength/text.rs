@@ -7,7 +7,8 @@ use spokeshave::result::{
 
 use crate::table::{figure, signed, table};
 
-/// The whole sheet: what decides first, then stations, cases, vibration, weight, hub, what was taken for granted, cautions.
+/// The whole sheet: what decides first, then stations, cases, vibration, weight, hub, what was taken for
+/// granted, cautions.
 pub(super) fn sheet(job: &Job, s: &Strength) -> String {
     let decides = s.governing.as_ref().map_or_else(
         || "No flight point has an answer: no load is known.".into(),
