@@ -33,7 +33,7 @@ struct Args {
     /// Folder for the copy of the workspace, what was built and `results.csv`; what is there is gone on with
     #[arg(long, default_value = "target/mutants")]
     folder: PathBuf,
-    /// Only where the mutant's file, line, column and change contain this
+    /// Only where the mutant's file, column, change and line of source contain this
     #[arg(long, default_value = "")]
     only: String,
     /// Run again on those that had survived
@@ -147,7 +147,8 @@ fn tell(known: &HashMap<String, Outcome>, mutants: &[Mutant], rooms: &[Room]) {
         let Some(outcome) = known.get(&mutant.key) else { continue };
         count[1 + outcome.fate as usize] += 1;
         if matches!(outcome.fate, Fate::Survived | Fate::Unreached) {
-            println!("{:?} ({} of {} tests) {}", outcome.fate, outcome.tried, outcome.reach, outcome.mutant);
+            let Outcome { fate, tried, reach, mutant: key, .. } = outcome;
+            println!("{fate:?} ({tried} of {reach} tests) line {} of {key}", mutant.line);
         }
     }
     for (room, [all, killed, hung, survived, unreached]) in rooms.iter().zip(counts) {

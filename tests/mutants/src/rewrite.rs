@@ -5,7 +5,7 @@
 //! expression. What is worked out by the compiler (constants, array lengths, `const fn`), patterns, tests and
 //! the insides of macros stay as they are.
 
-use std::collections::HashSet;
+use std::collections::{HashMap, HashSet};
 
 use proc_macro2::{Literal, Span};
 use quote::ToTokens;
@@ -18,7 +18,10 @@ use syn::{BinOp, Expr, ExprBinary, ExprMethodCall, Ident, Lit, LitFloat, UnOp, p
 pub struct Mutant {
     /// Its number in this build, from 1.
     pub number: u32,
-    /// Where it is and what it changes; the same in every build of the same source.
+    /// Line of its file.
+    pub line: usize,
+    /// File, column and change with the line's text: the same wherever that line has gone in its file, another
+    /// as soon as it is written otherwise.
     pub key: String,
 }
 
@@ -47,12 +50,16 @@ pub fn rewrite(
     refused: &HashSet<String>,
 ) -> syn::Result<String> {
     let mut tree = syn::parse_file(source)?;
-    Rewriter { file, mutants, refused }.visit_file_mut(&mut tree);
+    let lines = source.lines().map(str::trim).collect();
+    Rewriter { file, lines, taken: HashMap::new(), mutants, refused }.visit_file_mut(&mut tree);
     Ok(prettyplease::unparse(&tree))
 }
 
 struct Rewriter<'a> {
     file: &'a str,
+    lines: Vec<&'a str>,
+    /// How often each key was taken, for lines that are written twice.
+    taken: HashMap<String, u32>,
     mutants: &'a mut Vec<Mutant>,
     refused: &'a HashSet<String>,
 }
@@ -60,12 +67,19 @@ struct Rewriter<'a> {
 impl Rewriter<'_> {
     /// Takes up a mutant; gives the expression that asks for it, or nothing where the compiler refused it.
     fn asked(&mut self, at: Span, change: &str) -> Option<Expr> {
-        let key = format!("{}:{}:{} {change}", self.file, at.start().line, at.start().column + 1);
+        let (line, column) = (at.start().line, at.start().column + 1);
+        let text = self.lines.get(line - 1).unwrap_or(&"");
+        let mut key = format!("{} {column} {change} in {text}", self.file);
+        let times = self.taken.entry(key.clone()).or_default();
+        *times += 1;
+        if *times > 1 {
+            key = format!("{key} ({times})");
+        }
         if self.refused.contains(&key) {
             return None;
         }
         let number = u32::try_from(self.mutants.len() + 1).expect("fewer mutants");
-        self.mutants.push(Mutant { number, key });
+        self.mutants.push(Mutant { number, line, key });
         let number = Literal::u32_unsuffixed(number);
         Some(parse_quote!(crate::mutants::chosen(#number)))
     }
@@ -247,4 +261,44 @@ impl VisitMut for Rewriter<'_> {
     fn visit_type_mut(&mut self, _: &mut syn::Type) {}
     fn visit_generic_argument_mut(&mut self, _: &mut syn::GenericArgument) {}
     fn visit_attribute_mut(&mut self, _: &mut syn::Attribute) {}
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    const SOURCE: &str = "const FAR: f64 = 2.0 * 3.0;\nfn f(a: f64, b: f64) -> f64 {\n    a * b\n}\n";
+
+    fn rewritten(source: &str, refused: &[&str]) -> (String, Vec<Mutant>) {
+        let mut mutants = Vec::new();
+        let refused = refused.iter().map(|r| (*r).to_owned()).collect();
+        let text = rewrite("f.rs", source, &mut mutants, &refused).expect("source that can be read");
+        (text, mutants)
+    }
+
+    #[test]
+    fn an_operator_asks_and_what_the_compiler_works_out_stays() {
+        let (text, mutants) = rewritten(SOURCE, &[]);
+        assert!(text.contains("if crate::mutants::chosen(1) { x / y } else { x * y }"), "{text}");
+        assert!(text.contains("const FAR: f64 = 2.0 * 3.0;"), "{text}");
+        let [only] = mutants.as_slice() else { panic!("{mutants:?}") };
+        assert_eq!((only.number, only.line), (1, 3));
+    }
+
+    #[test]
+    fn a_mutant_keeps_its_key_where_its_line_moves_and_loses_it_where_the_line_changes() {
+        let key = |source: &str| rewritten(source, &[]).1[0].key.clone();
+        assert_eq!(key(SOURCE), key(&format!("// One line more.\n{SOURCE}")));
+        assert_ne!(key(SOURCE), key(&SOURCE.replace("a * b", "b * a")));
+        let twice = format!("{SOURCE}{}", SOURCE.replace("f(", "g(").replace("FAR", "NEAR"));
+        let (_, both) = rewritten(&twice, &[]);
+        assert_ne!(both[0].key, both[1].key);
+    }
+
+    #[test]
+    fn what_the_compiler_refused_and_tests_have_no_mutants() {
+        let key = rewritten(SOURCE, &[]).1[0].key.clone();
+        assert!(rewritten(SOURCE, &[&key]).1.is_empty());
+        assert!(rewritten(&format!("#[cfg(test)]\nmod tests {{ {SOURCE} }}"), &[]).1.is_empty());
+    }
 }

@@ -45,7 +45,7 @@ pub enum Fate {
 /// A line of the results.
 #[derive(Debug, Clone, Serialize, Deserialize)]
 pub struct Outcome {
-    /// File, line, column and change.
+    /// Its key.
     pub mutant: String,
     /// What became of it.
     pub fate: Fate,
