@@ -60,6 +60,9 @@ pub fn with_unit(units: Units, quantity: Quantity, si: Option<f64>) -> String {
 pub fn read(units: Units, quantity: Quantity, text: &str) -> Result<f64, String> {
     let text = text.trim().replace(MINUS, "-").replace([THIN_SPACE, '\u{a0}'], " ");
     let end = text.rfind(|c: char| c.is_ascii_digit() || c == '.' || c == ',').map_or(0, |i| i + 1);
+    if text.is_empty() {
+        return Err("a figure is needed".into());
+    }
     let (digits, suffix) = (text[..end].trim(), text[end..].trim());
     let value = number(digits).ok_or_else(|| "not a number".to_string())?;
     let si = if suffix.is_empty() {

@@ -62,8 +62,8 @@ pub(super) fn all() -> [(&'static str, String); 4] {
 fn wind_tunnel() -> String {
     let answers = [
         (&tunnel::PHOTOGRAPHED, ["CT computed", "CP computed"], 1.0),
-        (&tunnel::DISTURBED, [""; 2], 0.45),
-        (&tunnel::DRAWN, [""; 2], 0.2),
+        (&tunnel::DISTURBED, ["", "in disturbed air"], 0.45),
+        (&tunnel::DRAWN, ["", "by the drawing's angle"], 0.2),
     ];
     let lines = answers.iter().flat_map(|(answer, names, strength)| {
         let of = |pick: fn(&(f64, f64, f64)) -> (f64, f64)| answer.moving.iter().map(pick).collect();

@@ -13,6 +13,7 @@
   var BESIDE = "spokeshave.1.beside." + mark;
   var AT_WORK = "spokeshave.1.at-work." + mark;
   var latest = null;
+  var leaving = false;
 
   // 32-bit FNV-1a over UTF-16 units: tells files apart and whole text from half of it.
   function fingerprint(text) {
@@ -73,7 +74,7 @@
       latest = json;
       if (node) { node.textContent = json.replace(/</g, "\\u003c"); }
       var kept = keep(json);
-      write(AT_WORK, "1");
+      if (!leaving) { write(AT_WORK, "1"); }
       return kept;
     },
     // Blades beside the drawn one, as JSON; kept here and not in the job.
@@ -96,6 +97,12 @@
     }
   };
 
-  // Leaving in the middle of a computation is no crash.
-  window.addEventListener("pagehide", function () { page.keep.after(); });
+  // Leaving in the middle of a computation is no crash. What was being typed is meant, as when its box is left.
+  window.addEventListener("pagehide", function () {
+    leaving = true;
+    page.keep.after();
+    if (document.activeElement) { document.activeElement.blur(); }
+  });
+  // Come back to with the browser's Back.
+  window.addEventListener("pageshow", function () { leaving = false; });
 })(window.spokeshave = window.spokeshave || {});

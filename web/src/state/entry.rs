@@ -70,8 +70,11 @@ pub fn tried(
         matches!(field, Field::Log(_, LogFigure::Throttle)) && text.trim().eq_ignore_ascii_case("full");
     let typed = full.then_some(1.0).or(minutes).map_or_else(|| number::read(units, quantity, text), Ok);
     let value = typed.map_err(|why| {
-        let example = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));
-        example.map_or_else(|| sentence(&why), |e| format!("{} It was {e}.", sentence(&why)))
+        let was = field.value(job, drawn).map(|v| number::with_unit(units, quantity, Some(v)));
+        let was = was.map(|was| format!("It was {was}."));
+        // What is allowed is what is said of a figure that never is.
+        let allowed = written(job, units, field, f64::NAN).err().filter(|said| said.starts_with("Allowed "));
+        [Some(sentence(&why)), was, allowed].into_iter().flatten().collect::<Vec<_>>().join(" ")
     })?;
     if quantity == Quantity::Count && value.fract() != 0.0 {
         return Err("A whole number is needed.".into());

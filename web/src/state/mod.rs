@@ -37,7 +37,8 @@ pub use field::Field;
 pub use history::History;
 pub use machine::{
     AircraftChoice, AircraftFigure, AircraftKind, AltitudeKind, DragBy, EngineChoice, EngineFigure,
-    EngineKind, FuelBy, MakingFigure, WoodChoice, WoodFigure, species_of, wood_of,
+    EngineKind, FuelBy, MakingFigure, WoodChoice, WoodFigure, aircraft_untouched, engine_untouched,
+    species_of, wood_of,
 };
 pub use measure::Measure;
 pub use notice::Notice;

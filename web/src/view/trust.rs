@@ -66,7 +66,7 @@ fn minus(text: &str) -> String {
 fn pictures() -> Html {
     let picture = |(svg, caption): (&&'static str, &'static str)| {
         html! {
-            <figure class="on-paper">
+            <figure>
                 { Html::from_html_unchecked((*svg).into()) }
                 <figcaption>{ caption }</figcaption>
             </figure>

@@ -142,7 +142,7 @@ impl AircraftKind {
 
     /// An aircraft of this kind to start from, an example's; the mass stays.
     fn started(self, job: &Job) -> Option<Aircraft> {
-        let found = example_of(job, |example| example.aircraft.filter(|a| Self::of(Some(a)) == self));
+        let found = example_of(job, |example| example.aircraft.clone().filter(|a| Self::of(Some(a)) == self));
         let mass_kg = AircraftFigure::Mass.value(job);
         found.map(|mut aircraft| {
             if let (Some(place), Some(mass_kg)) = (AircraftFigure::Mass.place(&mut aircraft), mass_kg) {

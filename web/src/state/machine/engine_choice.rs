@@ -194,7 +194,8 @@ impl EngineChoice {
 
 /// An engine of a kind to start from, an example's; without its fuel where the aircraft could not carry that.
 fn started(kind: EngineKind, job: &Job) -> Option<Engine> {
-    let mut engine = example_of(job, |example| example.engine.filter(|e| EngineKind::of(Some(e)) == kind));
+    let mut engine =
+        example_of(job, |example| example.engine.clone().filter(|e| EngineKind::of(Some(e)) == kind));
     let fits = |engine: &Option<Engine>| Job { engine: engine.clone(), ..job.clone() }.check().is_empty();
     if !fits(&engine)
         && let Some(Engine::Piston(p)) = &mut engine

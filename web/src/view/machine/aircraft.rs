@@ -8,9 +8,11 @@ use yew::prelude::*;
 
 use super::asked::AskedCharts;
 use super::picks::kinds;
-use super::{hinted, labelled, optional};
+use super::{hinted, labelled, optional, still_invented};
 use crate::number::{figure, fixed, with_unit};
-use crate::state::{AircraftChoice, AircraftFigure, AircraftKind, Choice, DragBy, Field, State};
+use crate::state::{
+    AircraftChoice, AircraftFigure, AircraftKind, Choice, DragBy, Field, State, aircraft_untouched,
+};
 use crate::units::{Quantity, Units};
 use crate::view::chips::air_words;
 use crate::view::{Act, Seen, use_act};
@@ -72,6 +74,7 @@ pub fn AircraftPanel(props: &AircraftPanelProps) -> Html {
         <div class="machine">
             <div class="machine-form">
                 { kind }
+                { still_invented(&aircraft_untouched(state.job())) }
                 { figures(&act, state) }
             </div>
             { readings(state) }

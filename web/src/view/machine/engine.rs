@@ -9,10 +9,12 @@ use yew::prelude::*;
 use super::offered::OfferedChart;
 use super::picks::kinds;
 use super::rows::{Rows, RowsOf};
-use super::{labelled, optional};
+use super::{labelled, optional, still_invented};
 use crate::number::{fixed, with_unit};
 use crate::results::Offered;
-use crate::state::{AltitudeKind, Choice, EngineChoice, EngineFigure, EngineKind, Field, FuelBy, State};
+use crate::state::{
+    AltitudeKind, Choice, EngineChoice, EngineFigure, EngineKind, Field, FuelBy, State, engine_untouched,
+};
 use crate::units::{Quantity, Units};
 use crate::view::{Act, Seen, use_act};
 
@@ -76,6 +78,7 @@ pub fn EnginePanel(props: &EnginePanelProps) -> Html {
         <div class="machine">
             <div class="machine-form">
                 { kind }
+                { still_invented(&engine_untouched(state.job())) }
                 { figures(&act, state) }
             </div>
             <div class="machine-readings">

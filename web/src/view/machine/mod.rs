@@ -32,3 +32,11 @@ pub(super) fn hinted(state: &Seen, field: Field, hint: &'static str) -> Html {
     let label = capital(&field.name(state.job()));
     html! { <Labelled shown={Shown::of(state, &[], field)} {label} {hint} /> }
 }
+
+/// Which figures are still those of an invented example, where some are.
+fn still_invented(names: &[String]) -> Html {
+    if names.is_empty() {
+        return html! {};
+    }
+    html! { <p class="note">{ format!("Still an invented example's, put in your own: {}.", names.join(", ")) }</p> }
+}

@@ -5,7 +5,7 @@ use std::rc::Rc;
 use spokeshave::section::SectionCurve;
 use yew::prelude::*;
 
-use crate::chart::line::{Axis, LineChart, Series};
+use crate::chart::line::{Axis, LineChart, Series, Stroke};
 use crate::chart::unit::Unit;
 use crate::number::{fixed, fixed_or_none, signed_or_none};
 
@@ -51,12 +51,15 @@ fn chart(
     curves: &[SectionCurve],
     of: impl Fn(&[f64; 3]) -> f64,
 ) -> Html {
+    // Neighbours are told apart by their strokes.
+    let strokes = [Stroke::Solid, Stroke::Dashed, Stroke::Dotted];
     let series: Vec<Series> = curves
         .iter()
-        .map(|c| Series {
+        .zip(strokes.into_iter().cycle())
+        .map(|(c, stroke)| Series {
             name: short(c.reynolds).into(),
             points: c.points.iter().map(|p| [p[0], of(p)]).collect(),
-            ..Series::default()
+            stroke,
         })
         .collect();
     let x = Axis { words: "angle of attack".into(), unit: Unit { decimals: 0, ..Unit::DEGREE }, span: None };
