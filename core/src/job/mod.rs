@@ -8,6 +8,7 @@ mod document;
 mod drag;
 mod error;
 mod found;
+mod once;
 mod own;
 
 pub use check::{most_governed_rpm, section_name_known};
@@ -21,6 +22,7 @@ pub use document::{
 };
 pub use error::{JobError, MOST_BYTES, Problem, VERSION};
 
+use once::Once;
 use serde_json::Value;
 
 impl Job {
@@ -38,7 +40,7 @@ impl Job {
         if text.len() > MOST_BYTES {
             return Err(JobError::TooLarge { found_bytes: text.len() });
         }
-        let value: Value =
+        let Once(value) =
             serde_json::from_str(text.trim_start_matches('\u{feff}')).map_err(|e| syntax_error(text, &e))?;
         check_version(&value)?;
         let job: Self = serde_path_to_error::deserialize(value).map_err(|e| shape_error(&e))?;

@@ -11,6 +11,9 @@ pub const MAX_POINTS: usize = 2000;
 const MAX_GAP: f64 = 0.06;
 /// Largest turn at a point away from the nose, degrees.
 const MAX_TURN_DEG: f64 = 75.0;
+/// Steepest chord line in the list's own axes, degrees: nobody draws a section steeper, but one with its columns
+/// exchanged stands upright.
+const MAX_SLOPE_DEG: f64 = 60.0;
 /// Part of the chord from the nose within which any turn is allowed, for sharp noses.
 const NOSE_PART: f64 = 0.03;
 /// Least and largest thickness ratio of an outline.
@@ -46,6 +49,7 @@ pub(crate) fn frame(points: &[[f64; 2]], places: &[Place]) -> Result<Framed, Out
     }
     spikes(&framed, &places)?;
     crossings(&framed.points, &places)?;
+    upright(&framed)?;
     Ok(framed)
 }
 
@@ -72,6 +76,15 @@ fn repeats(points: &[[f64; 2]], places: &[Place]) -> Result<(), OutlineError> {
         Some(k) => Err(OutlineError::Repeated { place: places[k] }),
         None => Ok(()),
     }
+}
+
+fn upright(framed: &Framed) -> Result<(), OutlineError> {
+    // The angle between two lines, whichever way the list faces.
+    let found_deg = framed.rotation_rad.sin().abs().asin().to_degrees();
+    if found_deg <= MAX_SLOPE_DEG {
+        return Ok(());
+    }
+    Err(OutlineError::Upright { found_deg, allowed_deg: MAX_SLOPE_DEG })
 }
 
 /// Moves, turns and scales so that the nose is at (0, 0) and the middle of the trailing edge at (1, 0).

@@ -103,6 +103,18 @@ pub enum OutlineError {
         /// First point of the other.
         second: Place,
     },
+    /// The chord line stands upright, as where the columns are exchanged.
+    #[error(
+        "the chord line stands at {} degrees to the x axis: at most {allowed_deg} is allowed; are x and y \
+         exchanged?",
+        found_deg.round()
+    )]
+    Upright {
+        /// Angle of the chord line to the x axis, degrees.
+        found_deg: f64,
+        /// Largest angle allowed, degrees.
+        allowed_deg: f64,
+    },
     /// The two ends do not meet near enough at the trailing edge.
     #[error("the ends are {gap:.4} chord apart: the trailing edge may be open by at most {allowed:.2} chord")]
     NotClosed {

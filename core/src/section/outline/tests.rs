@@ -39,6 +39,17 @@ fn either_order_and_any_frame_give_the_same_outline() {
 }
 
 #[test]
+fn exchanged_columns_are_told() {
+    let wing = naca_four_digit(4, 4, 0.12).expect("a published section");
+    let exchanged: Vec<[f64; 2]> = wing.points().iter().map(|p| [p[1], p[0]]).collect();
+    let said = Outline::from_points("", &exchanged).expect_err("x and y are exchanged").to_string();
+    assert!(said.contains("90 degrees") && said.contains("are x and y exchanged?"), "{said}");
+    // A list that faces the other way is none.
+    let facing_back: Vec<[f64; 2]> = wing.points().iter().map(|p| [1.0 - p[0], p[1]]).collect();
+    assert!(Outline::from_points("", &facing_back).is_ok());
+}
+
+#[test]
 fn the_face_of_clark_y_is_two_degrees_under_its_chord_line() {
     let section = clark_y().expect("fixed ordinates");
     let angle = section.face_angle_rad().expect("a flat face").to_degrees();
