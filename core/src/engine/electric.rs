@@ -18,9 +18,10 @@ pub struct ElectricShaft {
 /// The electric side at one shaft load.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Electrics {
-    /// Motor current, A.
+    /// Current through the motor's windings, A: what the torque asks and the no-load current; below zero where
+    /// the propeller drives the motor by more than that.
     pub motor_current_a: f64,
-    /// Battery current of this motor, A.
+    /// Battery current of this motor, duty times the motor's, A; signed as that.
     pub battery_current_a: f64,
     /// Battery voltage under the load of all motors, V.
     pub battery_voltage_v: f64,
