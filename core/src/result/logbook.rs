@@ -149,7 +149,7 @@ impl Change {
             Means::Diameter if self.by_removal => "Trimming the tips",
             Means::Diameter => "Another diameter",
         };
-        if !self.reached && self.amount.abs() < NOTHING {
+        if self.is_in_vain() {
             return format!("{name} brings it no nearer.");
         }
         let degrees = |d: f64| format!("{d:+.2}°").replace('-', "\u{2212}");
