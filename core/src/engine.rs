@@ -65,7 +65,7 @@ impl Shaft {
     pub fn rpm_range(&self) -> (f64, f64) {
         match self {
             Self::Piston(p) => p.rpm_range(),
-            Self::Electric(e) => (1e-3 * e.no_load_rpm(), e.no_load_rpm()),
+            Self::Electric(e) => (1e-3 * e.data.no_load_rpm(), e.data.no_load_rpm()),
         }
     }
 

@@ -211,8 +211,7 @@ pub struct Figures {
     pub ct_over_cq: Option<f64>,
     /// `T V/P`, when thrust, speed and power are positive.
     pub efficiency: Option<f64>,
-    /// What an actuator disc of this size, without drag or swirl, would reach at this thrust: `2/(1 + sqrt(1
-    /// + Tc))`.
+    /// What an actuator disc of this size without drag or swirl would reach, `2/(1 + sqrt(1 + Tc))`.
     pub ideal_efficiency: Option<f64>,
     /// `T^1.5/(sqrt(2 ρ π R²) P)` at rest.
     pub figure_of_merit: Option<f64>,
@@ -257,13 +256,16 @@ pub struct Meeting {
     pub rate_of_climb_m_s: Option<f64>,
     /// Fuel flow of all engines, kg/h; `None` beyond the engine's power or limit rpm.
     pub fuel_kg_per_h: Option<f64>,
-    /// Motor current, A.
+    /// Current through the windings of one motor, A: what the torque asks and the no-load current; below zero
+    /// where the propeller drives the motor by more than that. `None` for a piston engine, and beyond what the
+    /// motor gives: past its rpm without load, its current limit or full duty.
     pub motor_current_a: Option<f64>,
-    /// Battery current, A.
+    /// Current that one motor draws from the battery, duty times the motor's, A, signed as that and known
+    /// where that is.
     pub battery_current_a: Option<f64>,
-    /// Battery voltage under load, V.
+    /// Battery voltage under the load of all motors, V; known where the motor's current is.
     pub battery_voltage_v: Option<f64>,
-    /// Duty of the controller, 0 to 1.
+    /// Duty of the controller, 0 to 1; known where the motor's current is.
     pub duty: Option<f64>,
 }
 

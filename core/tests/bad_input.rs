@@ -313,6 +313,26 @@ fn a_governor_stays_within_the_engine_through_its_gear() {
     assert!(job.check()[0].allowed.contains("the end of engine.full_throttle"));
 }
 
+/// Without load the motor of the second example turns 6 cells × 3.8 V × 470 rpm/V = 10,716 rpm.
+#[test]
+fn a_governor_stays_within_what_a_motor_turns_without_load() {
+    let mut job = Job::from_json(DEMOS[1].json).unwrap();
+    let governed = |rpm: f64| PitchControl::ConstantSpeed { rpm, turn_min_deg: -5.0, turn_max_deg: 20.0 };
+    job.propeller.pitch_control = governed(10_716.0);
+    assert_eq!(job.check(), []);
+    job.propeller.pitch_control = governed(10_717.0);
+    assert_eq!(
+        job.check()[0].to_string(),
+        "propeller.pitch_control.rpm: 10717 rpm, times gear_ratio 1 10717 rpm of the engine; allowed is up to \
+         10716.0 rpm, with 10716 rpm of the engine as the motor turns without load: engine.kv_rpm_per_v times \
+         the battery's voltage"
+    );
+    let Some(Engine::Electric(electric)) = &mut job.engine else { panic!("an electric motor") };
+    electric.gear_ratio = 2.0;
+    let (_, most) = job.check()[0].span.unwrap();
+    assert!((most - 5358.0).abs() < 1e-6, "{most}, but for the rounding of a product");
+}
+
 #[test]
 fn an_empty_battery_is_refused() {
     let mut job = Job::from_json(DEMOS[1].json).unwrap();

@@ -151,6 +151,10 @@ fn change(
     let rig = base.changed(means, amount).unwrap_or_else(|| base.rig().clone());
     let at = brief(&rig, point);
     let after = briefs(&rig);
+    let (plan, no_plan) = match base.planing(means, amount, wanted.point).transpose() {
+        Ok(plan) => (plan, None),
+        Err(why) => (None, Some(format!("What to take off cannot be told: {why}."))),
+    };
     Change {
         means,
         amount,
@@ -159,7 +163,8 @@ fn change(
         state: at.state,
         by_removal: base.is_wood(),
         had_deg: had_deg(base.rig(), &rig, means),
-        plan: base.planing(means, amount, wanted.point),
+        plan,
+        no_plan,
         diameter_m: rig.job.propeller.diameter_m,
         pitch_m: rig.rotor.blade.pitch_075_m(rig.turn_rad()),
         flight_points: before

@@ -1,7 +1,7 @@
 //! The propeller with a change made.
 
 use super::{DIAMETERS, MOST_TURN_DEG};
-use crate::carved::{Measured, mean_rig, planed, planing};
+use crate::carved::{CarvedError, Measured, mean_rig, planed, planing};
 use crate::job::{AngleReference, Propeller};
 use crate::result::{Means, RemovalPlan};
 use crate::rig::Rig;
@@ -38,10 +38,15 @@ impl<'r> Base<'r> {
     }
 
     /// What to take off carved blades for an amount; `None` where there is no wood, and for the tips.
-    pub(super) fn planing(&self, means: Means, amount: f64, point: usize) -> Option<RemovalPlan> {
+    pub(super) fn planing(
+        &self,
+        means: Means,
+        amount: f64,
+        point: usize,
+    ) -> Option<Result<RemovalPlan, CarvedError>> {
         let (measured, _) = self.wood.as_ref().filter(|_| means != Means::Diameter)?;
         let share = self.share(means);
-        planing(self.drawn, measured, point, |r| amount.to_radians() * share(r)).ok()
+        Some(planing(self.drawn, measured, point, |r| amount.to_radians() * share(r)))
     }
 
     /// Which share of a turn each radius has.

@@ -131,13 +131,7 @@ fn range(e: &Envelope, told: &Told) -> Vec<String> {
         let what = if e.hover_n().is_some() { "Fastest climb straight up" } else { "Top speed" };
         said.push(format!("{what}: {} at {}.", s.speed.say(top.airspeed_m_s), RPM.say(top.rpm)));
     }
-    if let (Some(weight), Some(short)) = (e.hover_n(), e.hover_short_n()) {
-        said.push(format!(
-            "It cannot hover: full throttle is {} short of the weight of {}.",
-            s.force.say(short),
-            s.force.say(weight)
-        ));
-    }
+    said.extend(e.cannot_hover(|n| s.force.say(n)));
     if let Some(t) = crate::fit::take_off(told.rig, e) {
         said.push(format!(
             "Take-off on level hard ground without wind: {} of roll, {} to a height of {}.",

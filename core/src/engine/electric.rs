@@ -18,9 +18,10 @@ pub struct ElectricShaft {
 /// The electric side at one shaft load.
 #[derive(Clone, Copy, Debug, PartialEq)]
 pub struct Electrics {
-    /// Motor current, A.
+    /// Current through the motor's windings, A: what the torque asks and the no-load current; below zero where
+    /// the propeller drives the motor by more than that.
     pub motor_current_a: f64,
-    /// Battery current of this motor, A.
+    /// Battery current of this motor, duty times the motor's, A; signed as that.
     pub battery_current_a: f64,
     /// Battery voltage under the load of all motors, V.
     pub battery_voltage_v: f64,
@@ -39,10 +40,6 @@ impl ElectricShaft {
         Self { data: data.clone(), motors, rounding_a: 0.0, factors: Factors::default() }
     }
 
-    fn open_circuit_v(&self) -> f64 {
-        f64::from(self.data.battery.cells) * self.data.battery.open_circuit_v_per_cell
-    }
-
     /// The battery's resistance as one motor meets it: the current of all flows through it.
     fn battery_ohm(&self) -> f64 {
         self.motors * f64::from(self.data.battery.cells) * self.data.battery.resistance_ohm_per_cell
@@ -56,16 +53,11 @@ impl ElectricShaft {
         30.0 / (PI * self.data.kv_rpm_per_v)
     }
 
-    /// Propeller rpm at full duty without current.
-    pub(super) fn no_load_rpm(&self) -> f64 {
-        self.open_circuit_v() * self.data.kv_rpm_per_v / self.data.gear_ratio
-    }
-
     pub(super) fn power_w(&self, rpm: f64, duty: f64) -> f64 {
         let motor_rpm = rpm * self.data.gear_ratio;
         let back_v = motor_rpm / self.data.kv_rpm_per_v;
-        let current =
-            (duty * self.open_circuit_v() - back_v) / (self.motor_ohm() + duty * duty * self.battery_ohm());
+        let current = (duty * self.data.battery.open_circuit_v() - back_v)
+            / (self.motor_ohm() + duty * duty * self.battery_ohm());
         let held =
             self.data.max_current_a.map_or(current, |most| rounded_least(current, most, self.rounding_a));
         let power_w = self.torque_per_a() * (held - self.data.no_load_current_a) * motor_rpm * PI / 30.0;
@@ -93,7 +85,7 @@ impl ElectricShaft {
         let current = torque / per_a + self.data.no_load_current_a;
         let nominal = torque / self.factors.engine_power / per_a + self.data.no_load_current_a;
         let motor_v = nominal * self.motor_ohm() + motor_rpm / self.data.kv_rpm_per_v;
-        let (voc, rb) = (self.open_circuit_v(), self.battery_ohm());
+        let (voc, rb) = (self.data.battery.open_circuit_v(), self.battery_ohm());
         // d Voc − d² Rb I = motor voltage; the smaller root, written without a division by Rb I.
         let under_root = voc * voc - 4.0 * rb * nominal * motor_v;
         let duty = 2.0 * motor_v / (voc + under_root.max(0.0).sqrt());

@@ -25,43 +25,31 @@ pub(super) fn marks(
     let solver = Solver::new(rig);
     let stall = stall_m_s(rig, at);
     let here = |airspeed_m_s: f64| Condition { airspeed_m_s, ..*at };
-    let full = |v: f64| {
-        let full = solver.full(&here(v), &mut Trail::beside(&followed.full, v)).ok()?;
-        Some(full_throttle(rig, &full, Vec::new()))
-    };
-    let flight = |v: f64| {
-        let met = solver.level(&here(v), &Trail::beside(&followed.level, v)).ok()?;
-        Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
-    };
-    // The slowest flight counts too: what is best there would else depend on how near to it a point happens
-    // to lie.
     let hovers = matches!(rig.aircraft, Some(Aircraft::Multirotor(_)));
-    let slowest = (hovers || stall > 0.0).then_some(stall);
-    let climb = |of: fn(&FullThrottle) -> Option<f64>| {
-        let first = slowest.and_then(|v| Some((v, full(v).as_ref().and_then(of)?)));
-        let v = summit(points, stall, first, |p| p.full.as_ref().and_then(of))?;
-        let f = full(v)?;
-        of(&f).filter(|value| *value > 0.0).map(|value| Mark {
-            airspeed_m_s: v,
-            rpm: f.rpm,
-            value,
-            held_at_limit: f.held_at_limit,
-        })
+    let slowest = Slowest { airspeed_m_s: stall, counts: hovers || stall > 0.0 };
+    let full = Line {
+        points,
+        slowest,
+        known: |p| p.full.as_ref(),
+        found: &|v| {
+            let full = solver.full(&here(v), &mut Trail::beside(&followed.full, v)).ok()?;
+            Some(full_throttle(rig, &full, Vec::new()))
+        },
+        turns: |f: &FullThrottle| (f.rpm, f.held_at_limit),
     };
-    let cruise = |of: fn(&Level) -> Option<f64>| {
-        let first = slowest.and_then(|v| Some((v, flight(v).as_ref().and_then(of)?)));
-        let v = summit(points, stall, first, |p| p.level.as_ref().and_then(of))?;
-        let l = flight(v)?;
-        of(&l).filter(|value| *value > 0.0).map(|value| Mark {
-            airspeed_m_s: v,
-            rpm: l.rpm,
-            value,
-            held_at_limit: false,
-        })
+    let flight = Line {
+        points,
+        slowest,
+        known: |p| p.level.as_ref(),
+        found: &|v| {
+            let met = solver.level(&here(v), &Trail::beside(&followed.level, v)).ok()?;
+            Some(level(rig, &met.condition, &met.loads, State::Ok, Vec::new()))
+        },
+        turns: |l: &Level| (l.rpm, false),
     };
     Marks {
-        best_rate_of_climb: climb(|f| f.rate_of_climb_m_s),
-        best_angle_of_climb: climb(|f| f.climb_angle_deg),
+        best_rate_of_climb: full.best(|f| f.rate_of_climb_m_s),
+        best_angle_of_climb: full.best(|f| f.climb_angle_deg),
         top_speed: top.map(|f| {
             let told = full_throttle(rig, &f, Vec::new());
             let airspeed_m_s = f.condition.airspeed_m_s;
@@ -69,8 +57,8 @@ pub(super) fn marks(
         }),
         closed_throttle_dive: dive(rig, at).map(|f| driven(rig, &f)),
         idle: idle(rig, at).map(|f| driven(rig, &f)),
-        best_range: cruise(|l| l.range_m),
-        best_endurance: cruise(|l| l.endurance_s),
+        best_range: flight.best(|l| l.range_m),
+        best_endurance: flight.best(|l| l.endurance_s),
         limit_rpm_from_m_s: passed(points, |f| if f.held_at_limit { 1.0 } else { -1.0 }),
         tip_mach_from: TIP_MACHS
             .iter()
@@ -92,25 +80,53 @@ fn driven(rig: &Rig, f: &Full) -> Mark {
     }
 }
 
-/// The speed of the greatest value: the top of the parabola through the highest point and its neighbours, or
-/// the highest point where it is at an end. Only speeds above rest and from the slowest flight on count,
-/// whose speed and value come first where they are known.
-fn summit(
-    points: &[EnvelopePoint],
-    stall: f64,
-    slowest: Option<(f64, f64)>,
-    of: impl Fn(&EnvelopePoint) -> Option<f64>,
-) -> Option<f64> {
-    let least = if slowest.is_some() { stall * (1.0 + 1e-6) } else { stall };
-    let later = points.iter().filter(|p| p.airspeed_m_s > 0.0 && p.airspeed_m_s >= least);
-    let later = later.filter_map(|p| of(p).map(|value| (p.airspeed_m_s, value)));
-    let values: Vec<(f64, f64)> = slowest.into_iter().chain(later).collect();
-    let top = (0..values.len()).max_by(|&a, &b| values[a].1.total_cmp(&values[b].1))?;
-    let at = |i: usize| values.get(i).copied();
-    let (Some(a), Some(b), Some(c)) = (top.checked_sub(1).and_then(at), at(top), at(top + 1)) else {
-        return at(top).map(|p| p.0);
-    };
-    Some(vertex(a, b, c))
+/// The slowest flight.
+#[derive(Clone, Copy)]
+struct Slowest {
+    airspeed_m_s: f64,
+    /// Whether it counts beside the envelope's points: what is best there would else depend on how near to it
+    /// a point happens to lie. It does not where no stall is known.
+    counts: bool,
+}
+
+/// One line of the map: full throttle, or level flight.
+struct Line<'a, T> {
+    points: &'a [EnvelopePoint],
+    slowest: Slowest,
+    /// The answer at one of the points.
+    known: fn(&EnvelopePoint) -> Option<&T>,
+    /// The answer at any speed, m/s.
+    found: &'a dyn Fn(f64) -> Option<T>,
+    /// Rpm of an answer, and whether it is held at the limit.
+    turns: fn(&T) -> (f64, bool),
+}
+
+impl<T> Line<'_, T> {
+    /// Where a figure is greatest, if it is above zero there.
+    fn best(&self, of: fn(&T) -> Option<f64>) -> Option<Mark> {
+        let airspeed_m_s = self.summit(of)?;
+        let answer = (self.found)(airspeed_m_s)?;
+        let (rpm, held_at_limit) = (self.turns)(&answer);
+        of(&answer).filter(|value| *value > 0.0).map(|value| Mark { airspeed_m_s, rpm, value, held_at_limit })
+    }
+
+    /// The speed of the greatest value: the top of the parabola through the highest point and its neighbours,
+    /// or the highest point where it is at an end. Only speeds above rest and from the slowest flight on
+    /// count, which comes first itself where it is known.
+    fn summit(&self, of: fn(&T) -> Option<f64>) -> Option<f64> {
+        let Slowest { airspeed_m_s: stall, counts } = self.slowest;
+        let first = counts.then_some(stall).and_then(|v| Some((v, of(&(self.found)(v)?)?)));
+        let least = if first.is_some() { stall * (1.0 + 1e-6) } else { stall };
+        let later = self.points.iter().filter(|p| p.airspeed_m_s > 0.0 && p.airspeed_m_s >= least);
+        let later = later.filter_map(|p| Some((p.airspeed_m_s, of((self.known)(p)?)?)));
+        let values: Vec<(f64, f64)> = first.into_iter().chain(later).collect();
+        let top = (0..values.len()).max_by(|&a, &b| values[a].1.total_cmp(&values[b].1))?;
+        let at = |i: usize| values.get(i).copied();
+        let (Some(a), Some(b), Some(c)) = (top.checked_sub(1).and_then(at), at(top), at(top + 1)) else {
+            return at(top).map(|p| p.0);
+        };
+        Some(vertex(a, b, c))
+    }
 }
 
 /// The top of the parabola through three points of which the middle one is highest.

@@ -61,6 +61,13 @@ impl Envelope {
         (short > 0.0).then_some(short)
     }
 
+    /// That it cannot hover, and by how much, a force (N) said by `force`; `None` where it can, or need not.
+    #[must_use]
+    pub fn cannot_hover(&self, force: impl Fn(f64) -> String) -> Option<String> {
+        let (weight, short) = (force(self.hover_n()?), force(self.hover_short_n()?));
+        Some(format!("It cannot hover: full throttle is {short} short of the weight of {weight}."))
+    }
+
     /// First and last speed (m/s) of the range at which full throttle cannot turn the propeller at any rpm of
     /// the engine's power curve; `None` where there is no such speed.
     #[must_use]

@@ -126,6 +126,8 @@ pub struct Change {
     pub had_deg: Option<f64>,
     /// What to take off carved blades, and what comes of it.
     pub plan: Option<RemovalPlan>,
+    /// Why it cannot be told what to take off, in a sentence, where it is by removal and cannot.
+    pub no_plan: Option<String>,
     /// Diameter after the change, m.
     pub diameter_m: f64,
     /// Geometric pitch at 0.75 R after the change, m.
@@ -147,7 +149,7 @@ impl Change {
             Means::Diameter if self.by_removal => "Trimming the tips",
             Means::Diameter => "Another diameter",
         };
-        if !self.reached && self.amount.abs() < NOTHING {
+        if self.is_in_vain() {
             return format!("{name} brings it no nearer.");
         }
         let degrees = |d: f64| format!("{d:+.2}°").replace('-', "\u{2212}");
@@ -156,7 +158,8 @@ impl Change {
             Means::Pitch | Means::Twist => degrees(self.had_deg.unwrap_or(self.amount)),
         };
         let planing = if self.plan.is_some() { ", by planing the face" } else { "" };
-        match self.means {
+        let no_plan = self.no_plan.as_ref().map_or_else(String::new, |why| format!(" {why}"));
+        let change = match self.means {
             Means::Pitch => {
                 format!("The whole blade turned, by {amount} at three quarters of the radius{planing}.")
             }
@@ -164,7 +167,8 @@ impl Change {
                 "The outer half turned, from nothing at half the radius to {amount} at the tip{planing}."
             ),
             Means::Diameter => format!("{name}: {amount} of diameter."),
-        }
+        };
+        change + &no_plan
     }
 
     /// Whether there is nothing to be had of it.
@@ -186,5 +190,32 @@ impl Change {
             )
         };
         (!names.is_empty()).then(says)
+    }
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn a_plan_that_fails_says_why() {
+        let mut change = Change {
+            means: Means::Pitch,
+            amount: -1.0,
+            reached: true,
+            had: Some(2_600.0),
+            state: State::Ok,
+            by_removal: true,
+            had_deg: Some(-1.0),
+            plan: None,
+            no_plan: None,
+            diameter_m: 1.52,
+            pitch_m: 1.1,
+            flight_points: Vec::new(),
+        };
+        let says = change.says(&|m| m.to_string());
+        change.no_plan = Some("What to take off cannot be told: the wood is not known.".into());
+        let told = change.says(&|m| m.to_string());
+        assert_eq!(told, says + " What to take off cannot be told: the wood is not known.");
     }
 }

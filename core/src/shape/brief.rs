@@ -1,5 +1,6 @@
 //! The figures of a flight point that decide between blades, without its stations.
 
+use super::limits::NO_FIGURE;
 use crate::aircraft::propellers;
 use crate::fit::{self, Answer, Near, Spare};
 use crate::job::{Figure, FlightPoint, Setting};
@@ -32,7 +33,7 @@ pub(super) struct Look {
 }
 
 /// Where level flight has no answer nothing is to spare.
-const NOTHING: Spare = Spare { rpm_share: -1.0, power_share: -1.0, highest_rpm: 0.0, given_w: 0.0 };
+const NOTHING: Spare = Spare { rpm_share: NO_FIGURE, power_share: NO_FIGURE, highest_rpm: 0.0, given_w: 0.0 };
 
 pub(super) fn look(rig: &Rig, point: &FlightPoint, near: &mut Near) -> Look {
     let level = point.setting == (Setting::Level {}) && rig.shaft.is_some();

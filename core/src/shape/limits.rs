@@ -44,7 +44,7 @@ pub(super) fn margins(
 ) -> Vec<Margin> {
     let mut all: Vec<Margin> = looked_at.iter().flat_map(|look| at_point(limits, look)).collect();
     if let (Some(least), Some(b)) = (limits.standing_rpm_least, standing) {
-        all.push(at_least(Limit::StandingRpmLeast, b, least));
+        all.push(at_least(Limit::StandingRpmLeast, Some(b.name.clone()), b.rpm, least));
     }
     let (width_m, depth_m) = blank_m(rig);
     let blade = [
@@ -63,7 +63,7 @@ pub(super) fn margins(
 fn stress(rig: &Rig, limits: &Limits, drawn: &BladeBeam) -> Option<Margin> {
     let least = limits.stress_margin_least?;
     let found = least_margin_like(drawn, rig).ok().flatten();
-    let share = found.as_ref().map_or(-1.0, |(_, margin)| (1.0 + margin) / (1.0 + least) - 1.0);
+    let share = found.as_ref().map_or(NO_FIGURE, |(_, margin)| (1.0 + margin) / (1.0 + least) - 1.0);
     let (flight_point, found) = found.unzip();
     Some(Margin { limit: Limit::StressMarginLeast, flight_point, found, allowed: Some(least), share })
 }
@@ -73,7 +73,7 @@ fn at_point(limits: &Limits, look: &Look) -> Vec<Margin> {
     let b = &look.brief;
     let place = || Some(b.name.clone());
     let mut all = Vec::new();
-    let share = if b.rpm.is_some() { 1.0 } else { -1.0 };
+    let share = if b.rpm.is_some() { 1.0 } else { NO_FIGURE };
     all.push(Margin { limit: Limit::Answer, flight_point: place(), found: None, allowed: None, share });
     if let Some(spare) = look.spare {
         let engine = [
@@ -88,20 +88,24 @@ fn at_point(limits: &Limits, look: &Look) -> Vec<Margin> {
     all.extend(limits.rpm_most.map(|most| at_most(Limit::RpmMost, place(), b.rpm, most)));
     for own in limits.rpm.iter().filter(|own| own.flight_point == b.name) {
         all.extend(own.most.map(|most| at_most(Limit::RpmMost, place(), b.rpm, most)));
-        all.extend(own.least.map(|least| at_least(Limit::RpmLeast, b, least)));
+        all.extend(own.least.map(|least| at_least(Limit::RpmLeast, place(), b.rpm, least)));
     }
     all.extend(limits.tip_mach_most.map(|most| at_most(Limit::TipMachMost, place(), b.tip_mach, most)));
     all
 }
 
-fn at_most(limit: Limit, flight_point: Option<String>, found: Option<f64>, most: f64) -> Margin {
-    let share = found.map_or(-1.0, |f| 1.0 - f / most);
+/// The share of a limit that is left where there is no figure to judge by: as if it were broken by the whole
+/// of it, for a search needs a number to get away from.
+pub(super) const NO_FIGURE: f64 = -1.0;
+
+pub(super) fn at_most(limit: Limit, flight_point: Option<String>, found: Option<f64>, most: f64) -> Margin {
+    let share = found.map_or(NO_FIGURE, |f| 1.0 - f / most);
     Margin { limit, flight_point, found, allowed: Some(most), share }
 }
 
-fn at_least(limit: Limit, b: &Brief, least: f64) -> Margin {
-    let share = b.rpm.map_or(-1.0, |rpm| rpm / least - 1.0);
-    Margin { limit, flight_point: Some(b.name.clone()), found: b.rpm, allowed: Some(least), share }
+pub(super) fn at_least(limit: Limit, flight_point: Option<String>, found: Option<f64>, least: f64) -> Margin {
+    let share = found.map_or(NO_FIGURE, |f| f / least - 1.0);
+    Margin { limit, flight_point, found, allowed: Some(least), share }
 }
 
 /// Width and depth of the box round every station: chord line and thickness laid across one another, on the

@@ -1,25 +1,35 @@
 //! Stations and fits before `SciPy`, the atmosphere before ambiance, sections before sectionproperties.
 
+use std::time::Instant;
+
 use serde_json::{Value, json};
 use spokeshave::air::Air;
-use spokeshave::job::{DEMOS, FlightPoint, Job, Setting};
-use spokeshave::rig::{Rig, rotation_rad_s};
+use spokeshave::job::{Aircraft, DEMOS, FlightPoint, Job, Setting};
+use spokeshave::rig::Rig;
 use spokeshave::rotor::Condition;
+use spokeshave::rotor::element::Element;
 use spokeshave::section::library;
 use spokeshave::wood::section::Shape;
 use spokeshave_tests::judge::ask;
 
 /// How many stations of each example are solved anew.
 const STATIONS: u32 = 24;
-/// Points of a table over the whole turn, and of a table over rpm.
-const ANGLES: u32 = 3600;
-const SPEEDS: u32 = 60;
+/// Heights at which fits are solved anew, m.
+const HEIGHTS_M: [f64; 2] = [0.0, 2500.0];
+/// How many times as long `SciPy` takes at least for a station: a hundred and more are measured, most of it the
+/// interpreter's own; a tenth of that holds on a machine with other work too.
+const SLOWER: f64 = 10.0;
+/// Rounds of which the quickest is taken as the program's time.
+const ROUNDS: u32 = 200;
 
-fn judged(script: &str, what: &Value) {
+/// Asks a judge about what is written to a file; gives what it says.
+fn judged(script: &str, what: &Value) -> String {
     let folder = tempfile::tempdir().unwrap();
     let file = folder.path().join("asked.json");
     std::fs::write(&file, what.to_string()).unwrap();
-    print!("{}", ask(script, &[file.to_str().unwrap()]).unwrap());
+    let said = ask(script, &[file.to_str().unwrap()]).unwrap();
+    print!("{said}");
+    said
 }
 
 /// The golden ratio's multiples spread evenly over 0 to 1: the same each time.
@@ -31,40 +41,41 @@ fn demos() -> impl Iterator<Item = Rig> {
     DEMOS.iter().map(|demo| Rig::new(&Job::from_json(demo.json).unwrap()).unwrap())
 }
 
-/// A station at some speed of flight and rotation as the judge needs it; `None` where lift points backward or
-/// the windmill brake state is met, for which the judge has no equations.
-fn station(rig: &Rig, name: &str, i: u32) -> Option<Value> {
+/// A radius and a condition at some speed of flight and rotation.
+fn place(rig: &Rig, i: u32) -> Option<(f64, Condition)> {
     let (blade, known) = (&rig.rotor.blade, rig.condition(0)?);
     let tip_m_s = known.rotation_rad_s * blade.radius_m * (0.5 + 0.6 * spread(i, 0));
     let at = Condition {
         rotation_rad_s: tip_m_s / blade.radius_m,
         // One in four stands still.
-        airspeed_m_s: if i.is_multiple_of(4) { 0.0 } else { 0.45 * tip_m_s * spread(i, 1) },
+        airspeed_m_s: if i.is_multiple_of(4) { 0.0 } else { 0.8 * tip_m_s * spread(i, 1) },
         ..known
     };
     let first = blade.station_radii_m().next()?;
-    let radius_m = first + (0.98 * blade.radius_m - first) * spread(i, 2);
-    let element = rig.rotor.element(&rig.rotor.ring(radius_m), &at).0;
-    let balance = element.balance()?;
-    if balance.windmill_brake || balance.inflow_rad <= 0.0 || element.section.at(element.angle_rad).cl < 0.0 {
-        return None;
-    }
-    let alpha_rad: Vec<f64> =
-        (0..=ANGLES).map(|k| std::f64::consts::PI * (f64::from(2 * k) / f64::from(ANGLES) - 1.0)).collect();
-    let of = |what: fn(&spokeshave::section::Coefficients) -> f64| -> Vec<f64> {
-        alpha_rad.iter().map(|a| what(&element.section.at(*a))).collect()
+    Some((first + (0.98 * blade.radius_m - first) * spread(i, 2), at))
+}
+
+/// The stations of an example whose air comes from ahead: there the judge looks.
+fn stations(rig: &Rig) -> Vec<(f64, Condition, Element<'_>)> {
+    let ahead = |(radius_m, at): (f64, Condition)| {
+        let element = rig.rotor.element(&rig.rotor.ring(radius_m), &at).0;
+        element.balance().filter(|b| b.inflow_rad > 0.0).map(|_| (radius_m, at, element))
     };
+    (0..STATIONS).filter_map(|i| place(rig, i)).filter_map(ahead).collect()
+}
+
+/// A station as the judge is asked for it.
+fn station(rig: &Rig, job: usize, (radius_m, at, element): &(f64, Condition, Element<'_>)) -> Option<Value> {
+    let name = format!("{}, r {radius_m:.4} m, {:.2} m/s", rig.job.title, at.airspeed_m_s);
     Some(json!({
-        "name": format!("{name}, r {radius_m:.4} m, {:.2} m/s, {tip_m_s:.1} m/s at the tip", at.airspeed_m_s),
-        "axial_m_s": element.axial_m_s, "turning_m_s": element.turning_m_s, "angle_rad": element.angle_rad,
-        "solidity": element.solidity, "blades": blade.count, "radius_m": radius_m, "tip_m": blade.radius_m,
-        "hub_m": blade.hub_radius_m, "hub_loss": rig.job.method.hub_loss,
-        "cl": of(|c| c.cl), "cd": of(|c| c.cd), "alpha_rad": alpha_rad, "inflow_rad": balance.inflow_rad,
+        "name": name, "job": job, "altitude_m": rig.job.flight_points[0].altitude_m, "radius_m": radius_m,
+        "airspeed_m_s": at.airspeed_m_s, "rotation_rad_s": at.rotation_rad_s,
+        "inflow_rad": element.balance()?.inflow_rad,
     }))
 }
 
-/// A flight point of the job solved by the program, with what its propeller gives and takes over rpm.
-fn fit(rig: &Rig, setting: &Setting, altitude_m: f64, airspeed_m_s: f64) -> Option<Value> {
+/// A flight point of the job solved by the program.
+fn fit(rig: &Rig, job: usize, setting: &Setting, altitude_m: f64, airspeed_m_s: f64) -> Option<Value> {
     let point = FlightPoint {
         name: format!("{} at {airspeed_m_s} m/s, {altitude_m} m", rig.job.title),
         altitude_m,
@@ -74,50 +85,56 @@ fn fit(rig: &Rig, setting: &Setting, altitude_m: f64, airspeed_m_s: f64) -> Opti
     };
     let here = Rig::new(&Job { flight_points: vec![point.clone()], ..rig.job.clone() }).unwrap();
     let found_rpm = here.point(0)?.rpm?;
-    let at = here.condition(0)?;
-    let rpm: Vec<f64> =
-        (0..=SPEEDS).map(|k| found_rpm * (0.7 + 0.6 * f64::from(k) / f64::from(SPEEDS))).collect();
-    let loads: Vec<(f64, f64)> = rpm
-        .iter()
-        .map(|rpm| {
-            let loads = here.rotor.loads(&Condition { rotation_rad_s: rotation_rad_s(*rpm), ..at });
-            (loads.thrust_n, loads.torque_n_m * rotation_rad_s(*rpm))
-        })
-        .collect();
-    let (thrust_n, power_w): (Vec<f64>, Vec<f64>) = loads.into_iter().unzip();
     let setting = if *setting == (Setting::Level {}) { "level" } else { "full-throttle" };
     Some(json!({
-        "name": format!("{}, {setting}", point.name), "setting": setting, "airspeed_m_s": airspeed_m_s,
-        "air": { "density_kg_m3": at.air.density_kg_m3 },
-        "job": serde_json::from_str::<Value>(&rig.job.to_json()).unwrap(),
-        "rpm": rpm, "thrust_n": thrust_n, "power_w": power_w, "found_rpm": found_rpm,
+        "name": format!("{}, {setting}", point.name), "job": job, "altitude_m": altitude_m,
+        "setting": setting, "airspeed_m_s": airspeed_m_s, "found_rpm": found_rpm,
     }))
 }
 
+/// Full throttle and level flight of an example over speeds and heights, as far as it has them.
+fn fits(rig: &Rig, job: usize) -> Vec<Value> {
+    let speeds: &[f64] = match &rig.job.aircraft {
+        Some(Aircraft::Multirotor(_)) => &[0.0],
+        _ if rig.job.propeller.diameter_m > 1.0 => &[0.0, 25.0, 35.0, 45.0],
+        _ => &[0.0, 14.0, 18.0, 24.0],
+    };
+    let at = |speed: &f64| {
+        let level = if *speed > 0.0 || speeds.len() == 1 { Some(Setting::Level {}) } else { None };
+        let settings = std::iter::once(Setting::FullThrottle {}).chain(level);
+        settings.flat_map(|s| HEIGHTS_M.map(|h| fit(rig, job, &s, h, *speed))).flatten().collect::<Vec<_>>()
+    };
+    speeds.iter().flat_map(at).collect()
+}
+
+/// Time of one balance of the program, on average over the stations, ms: the least of some rounds.
+fn balance_ms(rigs: &[Rig]) -> f64 {
+    let all: Vec<_> = rigs.iter().flat_map(stations).map(|(_, _, element)| element).collect();
+    let round = |_| {
+        let begun = Instant::now();
+        let lookups: u32 = all.iter().filter_map(Element::balance).map(|b| b.lookups).sum();
+        assert!(lookups > 0);
+        begun.elapsed().as_secs_f64() * 1e3 / all.len() as f64
+    };
+    (0..ROUNDS).map(round).fold(f64::INFINITY, f64::min)
+}
+
+/// The judge has the job files and the shipped tables of sections, and nothing else of the program's.
 #[test]
 fn validate_stations_and_fits_scipy() {
-    let stations: Vec<Value> = demos()
-        .flat_map(|rig| (0..STATIONS).filter_map(|i| station(&rig, &rig.job.title, i)).collect::<Vec<_>>())
-        .collect();
-    let fits: Vec<Value> = demos()
-        .flat_map(|rig| {
-            let speeds: &[f64] = match &rig.job.aircraft {
-                Some(spokeshave::job::Aircraft::Multirotor(_)) => &[0.0],
-                _ if rig.job.propeller.diameter_m > 1.0 => &[0.0, 25.0, 35.0, 45.0],
-                _ => &[0.0, 14.0, 18.0, 24.0],
-            };
-            let at = |speed: &f64| {
-                let level = if *speed > 0.0 || speeds.len() == 1 { Some(Setting::Level {}) } else { None };
-                let settings = std::iter::once(Setting::FullThrottle {}).chain(level);
-                let heights = [0.0, 2500.0];
-                let all = settings.flat_map(|s| heights.map(|h| fit(&rig, &s, h, *speed)));
-                all.flatten().collect::<Vec<_>>()
-            };
-            speeds.iter().flat_map(at).collect::<Vec<_>>()
-        })
-        .collect();
-    assert!(stations.len() > 40 && fits.len() > 20, "{} stations, {} fits", stations.len(), fits.len());
-    judged("solves.py", &json!({ "stations": stations, "fits": fits }));
+    let rigs: Vec<Rig> = demos().collect();
+    let jobs: Vec<Value> = rigs.iter().map(|rig| serde_json::from_str(&rig.job.to_json()).unwrap()).collect();
+    let of = |(job, rig): (usize, &Rig)| -> Vec<Value> {
+        stations(rig).iter().filter_map(|s| station(rig, job, s)).collect()
+    };
+    let asked: Vec<Value> = rigs.iter().enumerate().flat_map(of).collect();
+    let fits: Vec<Value> = rigs.iter().enumerate().flat_map(|(job, rig)| fits(rig, job)).collect();
+    assert!(asked.len() > 60 && fits.len() > 20, "{} stations, {} fits", asked.len(), fits.len());
+    let said = judged("solves.py", &json!({ "jobs": jobs, "stations": asked, "fits": fits }));
+    let scipy_ms: f64 = said.lines().last().and_then(|time| time.parse().ok()).unwrap();
+    let own_ms = balance_ms(&rigs);
+    println!("one station: SciPy {scipy_ms:.2} ms, the program {own_ms:.5} ms");
+    assert!(scipy_ms > SLOWER * own_ms, "SciPy {scipy_ms} ms, the program {own_ms} ms");
 }
 
 #[test]

@@ -44,37 +44,49 @@ pub(super) fn check_piston(found: &mut Found, p: &Piston, aircraft: Option<&Airc
     }
 }
 
-/// The most propeller rpm a governor may hold on a piston engine, and what sets it: its limit or the end of
-/// its curve.
-fn most_governed(p: &Piston) -> (f64, &'static str) {
-    let last = p.full_throttle.last().map_or(f64::INFINITY, |f| f.rpm);
-    let limit = p.max_rpm.unwrap_or(f64::INFINITY);
-    let (most, of) =
-        if limit <= last { (limit, "engine.max_rpm") } else { (last, "the end of engine.full_throttle") };
-    (most / p.gear_ratio, of)
+/// The most propeller rpm a governor may hold, and what sets it: a piston engine's limit or the end of its
+/// curve; how fast a motor turns without load.
+fn most_governed(engine: &Engine) -> (f64, &'static str) {
+    match engine {
+        Engine::Piston(p) => {
+            let last = p.full_throttle.last().map_or(f64::INFINITY, |f| f.rpm);
+            let limit = p.max_rpm.unwrap_or(f64::INFINITY);
+            let (most, of) = if limit <= last {
+                (limit, "engine.max_rpm has it")
+            } else {
+                (last, "the end of engine.full_throttle has it")
+            };
+            (most / p.gear_ratio, of)
+        }
+        Engine::Electric(e) => {
+            (e.no_load_rpm(), "the motor turns without load: engine.kv_rpm_per_v times the battery's voltage")
+        }
+    }
 }
 
 /// The most propeller rpm that a governor may hold on an engine; `None` where nothing sets it.
 #[must_use]
 pub fn most_governed_rpm(engine: Option<&Engine>) -> Option<f64> {
-    let Some(Engine::Piston(p)) = engine else { return None };
-    Some(most_governed(p).0).filter(|most| most.is_finite())
+    engine.map(|engine| most_governed(engine).0).filter(|most| most.is_finite())
 }
 
-/// A governor that holds more rpm than a piston engine may turn, or than its curve tells of, governs nothing.
+/// A governor that holds more rpm than the engine may turn, or its curve tells of, or the motor comes to
+/// without load, governs nothing.
 pub(super) fn check_governor(found: &mut Found, job: &Job) {
-    let (Some(Engine::Piston(p)), PitchControl::ConstantSpeed { rpm, .. }) =
-        (&job.engine, &job.propeller.pitch_control)
+    let (Some(engine), PitchControl::ConstantSpeed { rpm, .. }) = (&job.engine, &job.propeller.pitch_control)
     else {
         return;
     };
-    let (most, of) = most_governed(p);
+    let (most, of) = most_governed(engine);
     if *rpm > most * (1.0 + 1e-9) {
-        let gear = p.gear_ratio;
+        let gear = match engine {
+            Engine::Piston(p) => p.gear_ratio,
+            Engine::Electric(e) => e.gear_ratio,
+        };
         found.refuse(
             "propeller.pitch_control.rpm".into(),
             format!("{rpm} rpm, times gear_ratio {gear} {:.0} rpm of the engine", rpm * gear),
-            format!("up to {most:.1} rpm, with {:.0} rpm of the engine as {of} has it", most * gear),
+            format!("up to {most:.1} rpm, with {:.0} rpm of the engine as {of}", most * gear),
         );
         found.within(10.0, most);
     }

@@ -142,6 +142,22 @@ pub struct Electric {
     pub battery: Battery,
 }
 
+impl Electric {
+    /// Propeller rpm at full duty without current: the most that the motor turns by itself.
+    #[must_use]
+    pub fn no_load_rpm(&self) -> f64 {
+        self.battery.open_circuit_v() * self.kv_rpm_per_v / self.gear_ratio
+    }
+}
+
+impl Battery {
+    /// Voltage without current, V.
+    #[must_use]
+    pub fn open_circuit_v(&self) -> f64 {
+        f64::from(self.cells) * self.open_circuit_v_per_cell
+    }
+}
+
 /// A battery.
 #[derive(Clone, Debug, PartialEq, Serialize, Deserialize)]
 #[cfg_attr(feature = "cli", derive(schemars::JsonSchema))]

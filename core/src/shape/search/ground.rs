@@ -12,7 +12,7 @@ use crate::rig::Rig;
 use crate::rotor::Rotor;
 use crate::shape::ShapeError;
 use crate::shape::brief::{Look, brief, figure_at, look};
-use crate::shape::limits::{beam, margins, standing};
+use crate::shape::limits::{NO_FIGURE, beam, margins, standing};
 use crate::wood::BladeBeam;
 
 /// Limits count as kept to this share.
@@ -146,7 +146,7 @@ impl Ground {
     }
 
     pub(super) fn trial(&self, x: &[f64; FREE]) -> Trial {
-        let nothing = || Trial { x: *x, gain: NO_ANSWER, shares: vec![-1.0; self.count] };
+        let nothing = || Trial { x: *x, gain: NO_ANSWER, shares: vec![NO_FIGURE; self.count] };
         let Ok(rig) = shaped(&self.rig, x) else { return nothing() };
         let looks = self.looks(&rig);
         let shares = self.margins(&rig, &looks).iter().map(|m| m.share).collect();

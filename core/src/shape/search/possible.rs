@@ -6,6 +6,7 @@ use crate::job::{FlightPoint, Limits, PitchControl, Setting};
 use crate::result::{Limit, Margin};
 use crate::rig::Rig;
 use crate::shape::ShapeError;
+use crate::shape::limits::{at_least, at_most};
 
 /// Refuses limits of rpm outside what any blade can turn at a flight point; `standing` is that of the
 /// standing limit.
@@ -75,15 +76,17 @@ impl Span {
         least: Option<f64>,
         of_least: Limit,
     ) -> Result<(), ShapeError> {
-        let refused = |limit: Limit, (found, why): (f64, &str), allowed: f64| {
-            let flight_point = Some(name.to_string());
-            let margin =
-                Margin { limit, flight_point, found: Some(found), allowed: Some(allowed), share: -1.0 };
+        let place = || Some(name.to_string());
+        let refused = |margin: Margin, why: &str| {
             Err(ShapeError::Impossible { limit: margin.sentence(), why: why.into() })
         };
         match (most, least) {
-            (Some(most), _) if most < self.low.0 * SAME => refused(Limit::RpmMost, self.low, most),
-            (_, Some(least)) if least * SAME > self.high.0 => refused(of_least, self.high, least),
+            (Some(most), _) if most < self.low.0 * SAME => {
+                refused(at_most(Limit::RpmMost, place(), Some(self.low.0), most), self.low.1)
+            }
+            (_, Some(least)) if least * SAME > self.high.0 => {
+                refused(at_least(of_least, place(), Some(self.high.0), least), self.high.1)
+            }
             _ => Ok(()),
         }
     }

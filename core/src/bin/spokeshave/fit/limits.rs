@@ -62,10 +62,8 @@ pub(super) fn limits(fit: &Fit, kept: &[Margin]) -> Vec<String> {
 /// Why full throttle holds nothing up, where that is so.
 fn not_held_up(fit: &Fit) -> Option<String> {
     let e = &fit.envelope;
-    if let (Some(weight_n), Some(short_n)) = (e.hover_n(), e.hover_short_n()) {
-        return Some(format!(
-            "It cannot hover: full throttle is {short_n:.0} N short of the weight of {weight_n:.0} N."
-        ));
+    if let Some(says) = e.cannot_hover(|n| format!("{n:.0} N")) {
+        return Some(says);
     }
     let speeds = e.speeds.filter(|_| e.marks.top_speed.is_none())?;
     let words = if speeds.stall_m_s.is_some() {
