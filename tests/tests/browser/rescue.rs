@@ -114,28 +114,6 @@ async fn a_write_that_was_cut_off_leaves_the_one_before() -> Result<()> {
     .await
 }
 
-#[tokio::test(flavor = "multi_thread")]
-async fn what_was_being_typed_is_kept_when_the_page_is_left() -> Result<()> {
-    drive("half-typed", async |browser| {
-        browser.open_page().await?;
-        let half_typed =
-            "const box = [...document.querySelectorAll('input')].find(b => b.ariaLabel === 'Diameter, mm');
-            box.closest('details').open = true;
-            box.focus();
-            box.value = '1555';
-            box.dispatchEvent(new Event('input', { bubbles: true }));";
-        browser.run(half_typed).await?;
-        tokio::time::sleep(Duration::from_millis(300)).await;
-        browser.reload().await?;
-        let kept = browser.run("return spokeshave.keep.atStart()").await?;
-        let diameter_m = Job::from_json(kept.as_str().unwrap_or_default())?.propeller.diameter_m;
-        assert!((diameter_m - 1.555).abs() < 1e-9, "{diameter_m} m");
-        assert_eq!(browser.run("return spokeshave.keep.heldBack()").await?, false);
-        Ok(())
-    })
-    .await
-}
-
 /// Edits, each with a reload after 0 to 90 ms; `SPOKESHAVE_RELOADS=200` goes on longer.
 #[tokio::test(flavor = "multi_thread")]
 async fn reloads_in_the_middle_of_edits_lose_no_job() -> Result<()> {
