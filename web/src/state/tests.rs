@@ -60,7 +60,7 @@ fn a_wrong_entry_stays_as_typed_says_what_is_allowed_and_changes_nothing() {
     for (field, text, said) in [
         (CHORD_9, "-3", "Allowed is above 0, up to 1 520 mm."),
         (ANGLE_8, "95", "Allowed is −90 to 90°."),
-        (ANGLE_8, "abc", "Not a number. It was 20.2°."),
+        (ANGLE_8, "abc", "Not a number. It was 20.2°. Allowed is −90 to 90°."),
         (Field::Blades, "2.5", "A whole number is needed."),
         (Field::Blades, "13", "Allowed is 1 to 12."),
         (Field::Station(8, Measure::Thickness), "400", "Allowed is 0.38 to 76.5 mm."),
