@@ -94,4 +94,49 @@ mod tests {
             assert!((one_end(geometry, sin_phi) - exact).abs() < 1e-15);
         }
     }
+
+    /// `(2/π) acos(e^−f)`, `f = B/2 · distance/(reference · sin φ)` (L. Prandtl 1919, as in H. Glauert, *Airplane
+    /// Propellers*, 1935; the form at the hub is common practice).
+    fn written_out(blades: f64, distance: f64, reference: f64, sin: f64) -> f64 {
+        2.0 / std::f64::consts::PI * (-(blades * distance) / (2.0 * reference * sin)).exp().acos()
+    }
+
+    #[test]
+    fn prandtls_factor_is_that_of_the_tip_times_that_of_the_hub() {
+        let (tip, hub) = (0.76, 0.09);
+        for blades in [2.0, 3.0, 6.0] {
+            for r in [0.1, 0.13, 0.3, 0.6, 0.74] {
+                for sin in [0.05, 0.2, 0.5, 0.95] {
+                    let at_tip = written_out(blades, tip - r, r, sin);
+                    let at_hub = written_out(blades, r - hub, hub, sin);
+                    let both = Ends::new(blades, r, tip, hub, true).factor(sin);
+                    assert!((both - at_tip * at_hub).abs() < 1e-14, "{blades} {r} {sin}");
+                    for (hub, wanted) in [(hub, false), (0.0, true), (0.0, false)] {
+                        let alone = Ends::new(blades, r, tip, hub, wanted);
+                        assert!((alone.factor(sin) - at_tip).abs() < 1e-14, "{blades} {r} {sin} {hub}");
+                        assert!(!alone.bare());
+                    }
+                }
+            }
+        }
+    }
+
+    /// Goldstein's factors worked out by `tests/src/goldstein.rs`: (blades, λ, r/R, factor). The last, beside the
+    /// axis, is 1.249.
+    #[test]
+    fn goldsteins_factor_is_that_of_the_tip_and_at_most_one() {
+        for (blades, advance, x, exact) in [
+            (2, 0.13, 0.85, 0.77258),
+            (2, 0.6, 0.65, 0.50382),
+            (4, 0.33, 0.75, 0.82840),
+            (3, 0.24, 0.13, 1.0),
+        ] {
+            let (b, sin) = (f64::from(blades), advance / f64::hypot(advance, x));
+            let alone = Ends::new(b, x, 1.0, 0.1, false).exact_at_tip(blades, x).factor(sin);
+            // The table's cubics leave less than this.
+            assert!((alone - exact).abs() < 1e-3, "{blades} {advance} {x} {alone}");
+            let both = Ends::new(b, x, 1.0, 0.1, true).exact_at_tip(blades, x).factor(sin);
+            assert!((both - alone * written_out(b, x - 0.1, 0.1, sin)).abs() < 1e-14);
+        }
+    }
 }

@@ -91,3 +91,65 @@ impl BestLine {
         })
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::report::best_of;
+    use crate::rotor::tests::{at_speed, rotor};
+
+    /// Speed, rpm and blade angle all change along the line, so that Reynolds and Mach number do.
+    fn line() -> Vec<Condition> {
+        let condition = |i: i32| {
+            let share = f64::from(i) / 16.0;
+            let (rotation_rad_s, turn_rad) = (120.0 + 180.0 * share, 0.05 * share);
+            Condition { rotation_rad_s, turn_rad, ..at_speed(5.0 + 55.0 * share) }
+        };
+        (0..=16).map(condition).collect()
+    }
+
+    /// Each cell against its element solved by itself; its best angle is led over in a straight line between
+    /// every eighth condition's.
+    #[test]
+    fn every_cell_tells_of_its_own_element() {
+        let (rotor, line) = (rotor(|_| ()), line());
+        let tip = rotor.blade.radius_m;
+        let radii = [0.3 * tip, 0.5 * tip, 0.75 * tip, 0.9 * tip];
+        let map = departure_map(&rotor, &line, &radii);
+        assert_eq!((map.radii_m.as_slice(), map.cells.dim()), (radii.as_slice(), (4, 17)));
+        let mut changes = 0;
+        for (row, &r) in radii.iter().enumerate() {
+            let ring = rotor.ring(r);
+            let best = |i: usize| best_of(&rotor.element(&ring, &line[i]).0).unwrap();
+            for (column, at) in line.iter().enumerate() {
+                let element = rotor.element(&ring, at).0;
+                let balance = element.balance().unwrap();
+                let (before, after) = (column / 8 * 8, (column / 8 * 8 + 8).min(16));
+                let share = (column - before) as f64 / 8.0;
+                let led = |of: fn(&Best) -> f64| (1.0 - share) * of(&best(before)) + share * of(&best(after));
+                let (alpha, ratio) = (led(|b| b.alpha_rad), led(|b| b.lift_to_drag));
+                let cell = map.cells[[row, column]];
+                let close = |found: Option<f64>, wanted: f64| {
+                    // Degrees and shares; the balance closes to 1e-9.
+                    assert!((found.unwrap() - wanted).abs() < 1e-6, "{row} {column} {found:?} {wanted}");
+                };
+                close(cell.departure_deg, (balance.alpha_rad - alpha).to_degrees());
+                close(cell.share_of_best, balance.section.cl / balance.section.cd / ratio);
+                close(cell.past_stall_deg, (balance.alpha_rad - element.section.stall_rad()).to_degrees());
+                changes += usize::from((alpha - best(before).alpha_rad).abs() > 1e-4);
+            }
+        }
+        assert!(changes > 10, "{changes}: the best angle changes along the line");
+    }
+
+    #[test]
+    fn columns_carry_their_speed_and_rpm() {
+        let (rotor, line) = (rotor(|_| ()), line());
+        let map = departure_map(&rotor, &line, &[0.5]);
+        for (i, share) in [(0, 0.0), (7, 7.0 / 16.0), (16, 1.0)] {
+            let rpm = (120.0 + 180.0 * share) * 30.0 / std::f64::consts::PI;
+            assert!((map.rpm[i] / rpm - 1.0).abs() < 1e-12);
+            assert!((map.airspeeds_m_s[i] - (5.0 + 55.0 * share)).abs() < 1e-12);
+        }
+    }
+}

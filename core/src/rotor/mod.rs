@@ -281,3 +281,6 @@ impl Rotor {
 fn delay_fade(radius_fraction: f64) -> f64 {
     ((0.8 - radius_fraction) / 0.1).clamp(0.0, 1.0)
 }
+
+#[cfg(test)]
+mod tests;

@@ -58,3 +58,54 @@ impl Rotor {
         Some((element.angle_rad - flow.inflow_rad - best.alpha_rad).to_degrees())
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::rotor::tests::{at_speed, rotor};
+
+    /// What equal blades carry adds up to the whole, and each one's moments to those of the load by radius.
+    #[test]
+    fn equal_blades_share_the_whole_evenly() {
+        let rotor = rotor(|_| ()).taking(1.07);
+        for v in [0.0, 30.0, 50.0] {
+            let at = at_speed(v);
+            let whole = rotor.loads(&at);
+            let (mut bending, mut drag) = (0.0, 0.0);
+            for (graded, ring) in rotor.spread(&at).iter().zip(&rotor.rings) {
+                bending += graded.thrust_n_m * graded.radius_m * ring.width_m / 2.0;
+                drag += graded.torque_n / graded.radius_m * ring.width_m / 2.0;
+            }
+            for load in rotor.blade_loads(&[rotor.clone(), rotor.clone()], &at) {
+                for (found, wanted) in [
+                    (load.thrust_n, whole.thrust_n / 2.0),
+                    (load.torque_n_m, whole.torque_n_m / 2.0),
+                    (load.bending_n_m, bending),
+                    (load.drag_n, drag),
+                ] {
+                    assert!((found / wanted - 1.0).abs() < 1e-9, "{v} {found} {wanted}");
+                }
+            }
+        }
+    }
+
+    /// The flow is shared: a blade at a steeper angle is off by as much more, and only its own load grows.
+    #[test]
+    fn a_steeper_blade_departs_by_as_much_more() {
+        let mean = rotor(|_| ());
+        let steeper = rotor(|job| {
+            for station in &mut job.propeller.stations {
+                station.angle_deg = station.angle_deg.map(|deg| deg + 1.5);
+            }
+        });
+        let (at, r) = (at_speed(40.0), 0.7 * mean.blade.radius_m);
+        let element = mean.element(&mean.ring(r), &at).0;
+        let own = (element.balance().unwrap().alpha_rad - best_of(&element).unwrap().alpha_rad).to_degrees();
+        let departures = [&mean, &steeper].map(|blade| mean.departure_deg(blade, r, &at).unwrap());
+        assert!((departures[0] - own).abs() < 1e-9, "{departures:?} {own}");
+        assert!((departures[1] - own - 1.5).abs() < 1e-9, "{departures:?} {own}");
+        let loads = mean.blade_loads(&[mean.clone(), steeper], &at);
+        assert!((loads[0].thrust_n / (0.5 * mean.loads(&at).thrust_n) - 1.0).abs() < 1e-9);
+        assert!(loads[1].thrust_n > 1.05 * loads[0].thrust_n && loads[1].drag_n > 1.05 * loads[0].drag_n);
+    }
+}

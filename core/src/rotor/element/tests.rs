@@ -1,5 +1,7 @@
 //! The quick search for the balance against a plain fine scan, over ordinary and extraordinary elements.
 
+mod march;
+
 use proptest::prelude::*;
 use proptest::strategy::ValueTree;
 

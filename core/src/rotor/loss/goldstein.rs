@@ -79,4 +79,43 @@ mod tests {
         assert!(Share::new(2, 0.7).at(0.3) < 0.95);
         assert!(Share::new(2, 0.7).at(1.0).is_finite());
     }
+
+    /// Goldstein's factor over Prandtl's, both worked out anew away from the nodes of the table: the one by
+    /// `tests/src/goldstein.rs` on 64 and 128 nodes. (blades, λ, r/R, share, what the leading over leaves.)
+    #[test]
+    fn away_from_the_nodes_the_share_is_the_exact_one() {
+        for (blades, advance, x, share, within) in [
+            (2, 0.13, 0.85, 0.96751, 1e-3),
+            (2, 0.13, 0.93, 0.95879, 1e-3),
+            (3, 0.30, 0.55, 0.93264, 1e-3),
+            (4, 0.33, 0.75, 0.94390, 1e-3),
+            (2, 0.27, 0.70, 0.88154, 1e-3),
+            (2, 0.60, 0.65, 0.71835, 1e-3),
+            (6, 0.50, 0.45, 0.99310, 1e-3),
+            // Finer than the table: a straight line to 1, from which the share itself bends off.
+            (1, 0.02, 0.95, 0.99220, 2e-3),
+            (1, 0.0125, 0.95, 0.99693, 4e-3),
+        ] {
+            let found = Share::new(blades, x).at(advance / f64::hypot(advance, x));
+            assert!((found - share).abs() < within, "{blades} {advance} {x} {found} {share}");
+        }
+    }
+
+    /// Hermite's cubic with the slopes of the neighbours, at the ends of the one neighbour.
+    #[test]
+    fn the_cubic_is_hermites_in_the_middle_and_at_both_ends() {
+        let nodes = [1.0, 3.0, 2.0, 5.0, 4.5];
+        let slopes = [2.0, 0.5, 1.0, 1.25, -0.5];
+        for i in 0..4 {
+            for t in [0.0, 0.2, 0.5, 0.9] {
+                let (s, u) = (1.0 - t, t * t);
+                let wanted = (1.0 + 2.0 * t) * s * s * nodes[i]
+                    + t * s * s * slopes[i]
+                    + u * (3.0 - 2.0 * t) * nodes[i + 1]
+                    - u * s * slopes[i + 1];
+                let found = led_over(&nodes, i as f64 + t);
+                assert!((found - wanted).abs() < 1e-12, "{i} {t} {found} {wanted}");
+            }
+        }
+    }
 }
