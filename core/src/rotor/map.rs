@@ -69,6 +69,8 @@ fn filled(balance: &Balance, best: Option<Best>, stall_rad: f64) -> MapCell {
 /// Best angles of one radius along a line of conditions.
 struct BestLine {
     nodes: Vec<Option<Best>>,
+    /// The last condition: there the last node stands, however near the one before.
+    last: usize,
 }
 
 impl BestLine {
@@ -79,11 +81,13 @@ impl BestLine {
             let element = rotor.element(ring, line.get((k * BEST_EVERY).min(last))?).0;
             best(|a| element.section.at(a), element.section.stall_rad())
         };
-        Self { nodes: (0..count).map(node).collect() }
+        Self { nodes: (0..count).map(node).collect(), last }
     }
 
     fn at(&self, i: usize) -> Option<Best> {
-        let (k, w) = (i / BEST_EVERY, (i % BEST_EVERY) as f64 / BEST_EVERY as f64);
+        let k = i / BEST_EVERY;
+        let apart = (self.last - k * BEST_EVERY).clamp(1, BEST_EVERY);
+        let w = (i % BEST_EVERY) as f64 / apart as f64;
         let (a, b) = (self.nodes[k]?, self.nodes[k + 1]?);
         Some(Best {
             alpha_rad: a.alpha_rad + w * (b.alpha_rad - a.alpha_rad),
@@ -140,6 +144,20 @@ mod tests {
             }
         }
         assert!(changes > 10, "{changes}: the best angle changes along the line");
+    }
+
+    /// Whatever is left of a line after its last eighth condition, at its end the best angle is its own.
+    #[test]
+    fn the_last_condition_has_its_own_best_angle() {
+        let (rotor, line) = (rotor(|_| ()), line());
+        for count in [1, 2, 8, 9, 12, 16, 17] {
+            let (line, ring) = (&line[line.len() - count..], rotor.ring(0.5));
+            let element = rotor.element(&ring, &line[count - 1]).0;
+            let wanted = element.balance().unwrap().alpha_rad - best_of(&element).unwrap().alpha_rad;
+            let map = departure_map(&rotor, line, &[0.5]);
+            let found = map.cells[[0, count - 1]].departure_deg.unwrap();
+            assert!((found - wanted.to_degrees()).abs() < 1e-6, "{count}: {found} {wanted}");
+        }
     }
 
     #[test]
