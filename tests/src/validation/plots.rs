@@ -76,7 +76,7 @@ fn wind_tunnel() -> String {
     chart(
         SeriesLabelPosition::UpperRight,
         ["J", "CT, CP"],
-        [0.0..0.7, 0.0..0.1],
+        [0.0..0.7, 0.0..0.13],
         &lines.chain(measured).collect::<Vec<_>>(),
     )
 }
