@@ -151,4 +151,23 @@ mod tests {
     fn a_section_that_never_lifts_has_no_best() {
         assert!(best(|_| Coefficients { cl: -0.1, cd: 0.01 }, 0.2).is_none());
     }
+
+    /// Lift that rises up to the stall against a drag that does not: the best is at the stall, which lies between
+    /// two of the half-degree nodes.
+    #[test]
+    fn lift_to_drag_that_rises_to_the_stall_is_best_there() {
+        let stall = 9.7f64.to_radians();
+        let b = best(|a| Coefficients { cl: 5.0 * a, cd: 0.01 }, stall).unwrap();
+        assert!((b.alpha_rad - stall).to_degrees().abs() < 2e-3, "{}", b.alpha_rad.to_degrees());
+    }
+
+    #[test]
+    fn a_band_without_an_edge_reaches_as_far_on_both_sides() {
+        let found = Best { alpha_rad: 8f64.to_radians(), lift_to_drag: 50.0 };
+        let (lo, hi) = working_band(|_| Coefficients { cl: 0.5, cd: 0.01 }, found);
+        // The reach of 20 degrees, met to one step of a quarter degree.
+        for reach in [found.alpha_rad - lo, hi - found.alpha_rad] {
+            assert!((reach.to_degrees() - 20.0).abs() < 0.3, "{}", reach.to_degrees());
+        }
+    }
 }

@@ -51,3 +51,38 @@ fn curve(family: &Family, thickness_ratio: f64, reynolds: f64) -> SectionCurve {
         best: found.map(|b| (b.alpha_rad.to_degrees(), b.lift_to_drag)),
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::super::family::About;
+    use super::super::polar::{Polar, PolarPoint};
+    use super::*;
+
+    /// Lift 0.1 per degree and constant drag, from −10.1° to 12.3°, at two Reynolds numbers.
+    #[test]
+    fn curves_run_in_quarter_degrees_over_the_angles_of_the_table_and_no_farther() {
+        let polar = |reynolds: f64| {
+            let point = |k: i32| {
+                let alpha_deg = -10.1 + 1.4 * f64::from(k);
+                PolarPoint { alpha_deg, cl: 0.1 * alpha_deg, cd: 0.01, cm: None }
+            };
+            let points = (0..=16).map(point).collect();
+            Polar { reynolds: Some(reynolds), mach: 0.0, thickness_ratio: None, points }
+        };
+        let family = Family::new(About::default(), &[polar(1e5), polar(1e6)]).unwrap();
+        let curves = section_curves(&family, 0.12);
+        assert_eq!(curves.iter().map(|c| c.reynolds).collect::<Vec<_>>(), [1e5, 1e6]);
+        for curve in curves {
+            assert!((curve.points[0][0] + 10.1).abs() < 1e-9);
+            let last = curve.points[curve.points.len() - 1][0];
+            assert!(last <= 12.3 + 1e-9 && last > 12.3 - 0.25, "{last}");
+            assert!(curve.points.windows(2).all(|p| (p[1][0] - p[0][0] - 0.25).abs() < 1e-9));
+            // Beside the first and the last row the curve bends towards the extension of the table.
+            let mut inner = curve.points.iter().filter(|p| p[0].abs() < 8.0);
+            assert!(inner.clone().count() > 60);
+            assert!(inner.all(|p| (p[1] - 0.1 * p[0]).abs() < 1e-9 && (p[2] - 0.01).abs() < 1e-12));
+            let (angle_deg, lift_to_drag) = curve.best.unwrap();
+            assert!((angle_deg - 12.3).abs() < 2e-3 && (lift_to_drag - 123.0).abs() < 0.03);
+        }
+    }
+}

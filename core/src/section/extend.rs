@@ -142,4 +142,17 @@ mod tests {
         assert!(all.windows(2).all(|w| w[0].0 < w[1].0));
         assert!(rows.iter().all(|r| all.contains(r)));
     }
+
+    /// A table that covers nearly the whole turn is carried to its two ends and gets no row between.
+    #[test]
+    fn a_table_of_nearly_the_whole_turn_is_closed_at_both_ends() {
+        let rows: Vec<_> = (-179..=179)
+            .map(|d| f64::from(d).to_radians())
+            .map(|a| (a, Coefficients { cl: (2.0 * a).sin(), cd: 1.0 - 0.9 * a.cos() }))
+            .collect();
+        let all = extended(&rows);
+        assert_eq!(all.len(), rows.len() + 2);
+        assert_eq!((all[0].0, all[0].1), (-PI, rows[0].1));
+        assert_eq!((all[all.len() - 1].0, all[all.len() - 1].1), (PI, rows[rows.len() - 1].1));
+    }
 }

@@ -153,9 +153,11 @@ mod tests {
     fn every_family_that_is_shipped_unpacks() {
         let names: Vec<&str> = library().names().collect();
         assert!(names.contains(&"clark-y"));
+        assert!(!library().has_outline("no such section"));
         for name in names {
             let sets = library().n_crits(name);
             assert!(!sets.is_empty(), "{name} has no tables");
+            assert_eq!(library().has_outline(name), library().outline(name, 0.12).is_some(), "{name}");
             assert!(
                 sets.iter().all(|n| library().family(name, *n).is_some()),
                 "{name}'s tables are not usable"

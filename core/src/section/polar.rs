@@ -151,3 +151,36 @@ fn check_family(polars: &[Polar]) -> Result<(), TableError> {
     }
     Ok(())
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// The last value that is allowed and the first that is not, as the messages say them, with their path.
+    #[test]
+    fn limits_lie_where_the_messages_say() {
+        type Put = fn(&mut Polar, f64);
+
+        let points = (0..5)
+            .map(|k| PolarPoint { alpha_deg: f64::from(k), cl: 0.1, cd: 0.01, cm: Some(0.0) })
+            .collect();
+        let fair = Polar { reynolds: Some(1e5), mach: 0.0, thickness_ratio: Some(0.1), points };
+        let cases: [(Put, &str, [f64; 2], [f64; 2]); 6] = [
+            (|p, v| p.points[4].cm = Some(v), "polars[0].points[4].cm", [-10.0, 10.0], [-10.01, 10.01]),
+            (|p, v| p.points[4].cl = v, "polars[0].points[4].cl", [-10.0, 10.0], [-10.01, 10.01]),
+            (|p, v| p.points[4].cd = v, "polars[0].points[4].cd", [1e-9, 10.0], [0.0, 10.01]),
+            (|p, v| p.thickness_ratio = Some(v), "polars[0].thickness_ratio", [0.005, 1.0], [0.0049, 1.01]),
+            (|p, v| p.reynolds = Some(v), "polars[0].reynolds", [100.0, 1e9], [99.0, 1.01e9]),
+            (|p, v| p.mach = v, "polars[0].mach", [0.0, 0.94], [-0.01, 0.95]),
+        ];
+        for (put, place, fits, not) in cases {
+            let checked = |v: f64| {
+                let mut polar = fair.clone();
+                put(&mut polar, v);
+                check_polars(&[polar])
+            };
+            assert!(fits.into_iter().all(|v| checked(v).is_ok()), "{place}");
+            assert!(not.into_iter().all(|v| checked(v).is_err_and(|e| e.place == place)), "{place}");
+        }
+    }
+}

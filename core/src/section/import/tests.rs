@@ -116,3 +116,20 @@ proptest! {
         }
     }
 }
+
+/// The last figure that is allowed and the first that is not, as the messages say them.
+#[test]
+fn limits_lie_where_the_messages_say() {
+    let with = |heading: &str, value: &str| GOOD.replace("Re", heading).replace("2e5", value);
+    for (heading, fits, not) in [
+        ("Re", "1e9", "1.01e9"),
+        ("Re", "100", "99"),
+        ("t/c", "0.005", "0.0049"),
+        ("t/c", "1", "1.01"),
+        ("Mach", "0", "-0.01"),
+        ("Mach", "0.94", "0.95"),
+    ] {
+        assert!(read(&with(heading, fits), "").is_ok(), "{heading} {fits}");
+        assert!(message(&with(heading, not)).contains(not), "{heading} {not}");
+    }
+}

@@ -101,3 +101,76 @@ fn coefficients_nowhere_rise_more_than_the_bound_says() {
         }
     }
 }
+
+/// Lift 1.9 from 10° on against a drag of 0.01, at half the speed of sound: what the growth of lift adds fades
+/// out over 20°, and the bound stands close over the rise this makes.
+#[test]
+fn the_bound_is_close_where_the_growth_of_lift_fades_out() {
+    let point = |i: i32| {
+        let alpha_deg = f64::from(i) * 0.5;
+        PolarPoint { alpha_deg, cl: 1.9, cd: 0.01, cm: None }
+    };
+    let points = (-40..=40).map(point).collect();
+    let table = Polar { reynolds: None, mach: 0.0, thickness_ratio: None, points };
+    let about = About { korn_factor: 0.95, ..About::default() };
+    let family = Family::new(about, &[table]).unwrap();
+    let mut local = local(&family, 0.5, 0.0);
+    // The plateau alone: the rows' own bound, and a stall where the fading lies within them.
+    (local.landmarks.stall, local.landmarks.steepest) = (-5.0 * DEG, 1.91);
+    let rise = |deg: f64| {
+        let (a, b) = (local.at(deg * DEG), local.at((deg + 0.01) * DEG));
+        ((b.cl - a.cl).abs() + (b.cd - a.cd).abs()) / (0.01 * DEG) + a.cl.abs() + a.cd
+    };
+    let most = (-40..120).map(|i| rise(0.125 * f64::from(i))).fold(0.0, f64::max);
+    let bound = local.steepest();
+    assert!(most <= bound && bound < 1.05 * most, "{most} {bound}");
+}
+
+/// Two tables that are the same but for their Reynolds number: between them every landmark is theirs.
+#[test]
+fn landmarks_between_equal_tables_are_theirs() {
+    let point = |i: i32| {
+        let alpha_deg = f64::from(i);
+        PolarPoint { alpha_deg, cl: 0.1 * alpha_deg.clamp(-8.0, 10.0) + 0.23, cd: 0.01, cm: None }
+    };
+    let table = |re: f64| Polar {
+        reynolds: Some(re),
+        mach: 0.0,
+        thickness_ratio: None,
+        points: (-15..=20).map(point).collect(),
+    };
+    let family = Family::new(About::default(), &[table(1e5), table(1e6)]).unwrap();
+    let marks = |reynolds: f64| {
+        *Local::new(&family, Situation { thickness_ratio: 0.1, reynolds, mach: 0.0, stall_delay: 0.0 })
+            .landmarks()
+    };
+    let (own, between) = (marks(1e5), marks(3e5));
+    // Lift of 0.1 per degree is 5.7 per radian.
+    assert!(own.steepest > 5.7, "{own:?}");
+    let all = |l: Landmarks| [l.zero_lift, l.stall, l.negative_stall, l.first, l.last, l.steepest];
+    for (a, b) in all(own).into_iter().zip(all(between)) {
+        assert!((a - b).abs() < 1e-12 && a != 0.0, "{own:?} {between:?}");
+    }
+}
+
+/// Let in from half way between zero lift and stall, half of it at three quarters; faded out from 30° to 50°.
+#[test]
+fn the_delay_of_stall_is_let_in_and_faded_out_evenly() {
+    let f = family();
+    let gain =
+        |deg: f64| local(&f, 0.0, 0.5).at(deg.to_radians()).cl - local(&f, 0.0, 0.0).at(deg.to_radians()).cl;
+    let lost = |deg: f64, cl: f64| std::f64::consts::TAU * deg.to_radians().sin() - cl;
+    assert!((gain(7.5) - 0.5 * 0.5 * lost(7.5, 0.75)).abs() < 1e-9);
+    assert!((gain(6.0) - 0.5 * 0.2 * lost(6.0, 0.60)).abs() < 1e-9);
+    let at_40 = local(&f, 0.0, 0.0).at(40f64.to_radians()).cl;
+    assert!((gain(40.0) - 0.5 * 0.5 * lost(40.0, at_40)).abs() < 1e-9);
+    assert!(gain(49.999) < 1e-3);
+}
+
+/// Korn: with ka 0.87, t/c 0.12 and a lift coefficient of 0.8 Mdd is 0.67, and lift grows no further beyond.
+#[test]
+fn growth_stops_sooner_where_there_is_more_lift() {
+    let f = family();
+    let c = local(&f, 0.74, 0.0).at(8f64.to_radians());
+    assert!((c.cl / 0.8 - 1.0 / (1.0f64 - 0.67 * 0.67).sqrt()).abs() < 1e-9, "{}", c.cl);
+}

@@ -57,3 +57,59 @@ fn peak(made: &Made, turn_deg: f64) -> Option<Peak> {
     let summary = Summary::of(&made.polar()?).ok()?;
     Some(Peak { angle_deg: summary.best_angle_deg? - turn_deg, lift_to_drag: summary.best_lift_to_drag? })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::section::make::Request;
+    use crate::section::outline::{clark_y, naca_four_digit};
+    use crate::section::solver::{Solved, State};
+
+    /// A polar as if computed: cl = 0.1 (α + 4°), cd = `scale` (0.01 + 0.01 cl²), best at cl = 1 and α = 6°.
+    fn made(scale: f64) -> Made {
+        let point = |k: i32| {
+            let alpha_deg = f64::from(k);
+            let cl = 0.1 * (alpha_deg + 4.0);
+            let none = 0.5;
+            Solved {
+                alpha_deg,
+                cl,
+                cd: scale * (0.01 + 0.01 * cl * cl),
+                cm: 0.0,
+                xtr_upper: none,
+                xtr_lower: none,
+                iterations: 5,
+                residual: 0.0,
+                state: State::Converged,
+            }
+        };
+        Made { thickness_ratio: 0.12, reynolds: 1e6, points: (-6..=12).map(point).collect() }
+    }
+
+    /// An edge of 2 % on the back of a flat-faced section turns its chord line by half of what was added: the
+    /// same polar about the turned chord lies that much away from the drawing's, and twice the drag leaves half
+    /// the lift-to-drag. The table says how thick the edge is.
+    #[test]
+    fn angles_are_told_to_the_chord_line_of_the_drawing() {
+        let request = Request { edge_thickness: Some(0.02), ..Request::free(&[1e6], 9.0) };
+        let [drawn, carved] =
+            [request.as_drawn(), request].map(|r| Plan::new(&clark_y().unwrap(), &r).unwrap());
+        let compared = compare((&carved, &[made(2.0)]), (&drawn, &[made(1.0)]));
+        let (angle_deg, share) = compared[0].change().unwrap();
+        let added = 0.02 - clark_y().unwrap().measures().edge_thickness;
+        // The chord line drops at the nose by half of what was added: its angles of attack are smaller than those
+        // of the drawing by as much.
+        assert!((angle_deg - (0.5 * added).to_degrees()).abs() < 0.01, "{angle_deg}");
+        assert!((share - 0.5).abs() < 1e-6, "{share}");
+        let says = |plan: &Plan, words: &str| {
+            let said = plan.table(&[made(1.0)]).unwrap().origin;
+            assert!(said.contains(words), "{said}");
+        };
+        says(&carved, "Trailing edge left up to 2 % of the chord thick, where the drag is less certain");
+        says(&drawn, "Trailing edge drawn up to 0.12 % of the chord thick. 19 of 19 points");
+        says(&drawn, "from the outline \"Clark Y\"");
+        let section = naca_four_digit(0, 0, 0.12).unwrap();
+        let nameless = Outline::from_points("", section.points()).unwrap();
+        says(&Plan::new(&nameless, &Request::free(&[1e6], 9.0)).unwrap(), "an outline without a name");
+    }
+}

@@ -47,3 +47,17 @@ fn two_figures(value: f64) -> f64 {
     let unit = 10f64.powi(value.log10().floor() as i32 - 1);
     (value / unit).round() * unit
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn thicknesses_are_the_ends_and_the_middle_in_hundredths() {
+        assert_eq!(proposed_thickness(&[0.081, 0.302, 0.12]), [0.08, 0.19, 0.3]);
+        assert_eq!(proposed_thickness(&[0.12]), [0.12]);
+        // What can be asked for is 0.01 to 0.6.
+        assert_eq!(proposed_thickness(&[0.001, 0.9]), [0.01, 0.31, 0.6]);
+        assert!(proposed_thickness(&[f64::NAN]).is_empty());
+    }
+}

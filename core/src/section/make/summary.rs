@@ -52,3 +52,38 @@ impl Summary {
         })
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::section::polar::PolarPoint;
+
+    /// cl = 2π(α − `zero`), cd = 0.01 + 0.01 cl²: best at cl = 1, where cl/cd = 50.
+    fn polar(zero_deg: f64, angles_deg: std::ops::RangeInclusive<i32>) -> Polar {
+        let point = |k: i32| {
+            let alpha_deg = f64::from(k);
+            let cl = std::f64::consts::TAU * (alpha_deg - zero_deg).to_radians();
+            PolarPoint { alpha_deg, cl, cd: 0.01 + 0.01 * cl * cl, cm: None }
+        };
+        Polar { reynolds: None, mach: 0.0, thickness_ratio: None, points: angles_deg.map(point).collect() }
+    }
+
+    #[test]
+    fn the_figures_are_those_of_the_polar() {
+        let found = Summary::of(&polar(-2.0, -6..=13)).unwrap();
+        assert!((found.zero_lift_deg.unwrap() + 2.0).abs() < 1e-9);
+        // Between rows a degree apart cl/cd is met to 0.2 %, and its top is flat.
+        assert!((found.best_lift_to_drag.unwrap() - 50.0).abs() < 0.1);
+        let expected = (1.0 / std::f64::consts::TAU).to_degrees() - 2.0;
+        assert!((found.best_angle_deg.unwrap() - expected).abs() < 0.5);
+        assert!((found.cl_max - std::f64::consts::TAU * 15f64.to_radians()).abs() < 1e-9);
+        assert!((found.cd_min - 0.01).abs() < 1e-9);
+    }
+
+    #[test]
+    fn a_polar_without_a_crossing_tells_no_angle_of_zero_lift() {
+        for angles_deg in [0..=8, -12..=-3] {
+            assert_eq!(Summary::of(&polar(-2.0, angles_deg)).unwrap().zero_lift_deg, None);
+        }
+    }
+}

@@ -85,3 +85,26 @@ fn angles_are_whole_steps() {
     assert_eq!(angles[10], 0.0);
     assert_eq!(angles[20], 1.0);
 }
+
+/// The last figure that is allowed and the first that is not.
+#[test]
+fn limits_of_a_request_lie_where_the_messages_say() {
+    let list = |first_deg: f64, last_deg: f64, step_deg: f64| Angles { first_deg, last_deg, step_deg }.list();
+    for (fits, not) in [
+        ([-30.0, 0.0, 0.5], [-30.5, 0.0, 0.5]),
+        ([0.0, 30.0, 0.5], [0.0, 30.5, 0.5]),
+        ([0.0, 25.0, 5.0], [0.0, 25.0, 5.1]),
+    ] {
+        assert!(list(fits[0], fits[1], fits[2]).is_ok(), "{fits:?}");
+        assert!(list(not[0], not[1], not[2]).is_err(), "{not:?}");
+    }
+    assert!(list(-40.0, -31.0, 1.0).unwrap_err().to_string().contains("first angle"));
+    assert!(list(10.0, -31.0, 1.0).unwrap_err().to_string().contains("last angle"));
+    let polars = |reynolds: u32, thicknesses: u32| Request {
+        reynolds: (1..=reynolds).map(|k| 1e5 * f64::from(k)).collect(),
+        thickness_ratios: (1..=thicknesses).map(|k| 0.02 * f64::from(k)).collect(),
+        ..quick(&[])
+    };
+    assert!(polars(12, 10).check().is_ok());
+    assert!(polars(12, 11).check().unwrap_err().to_string().contains("count of polars 132"));
+}

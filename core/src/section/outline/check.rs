@@ -171,3 +171,79 @@ pub(crate) fn reframe(points: &[[f64; 2]], nose: [f64; 2]) -> (Vec<[f64; 2]>, f6
     });
     (turned.collect(), -dy.atan2(dx))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn places(count: usize) -> Vec<Place> {
+        (1..=count).map(|point| Place { point, line: None }).collect()
+    }
+
+    /// Two pieces in general position, turned and moved: across, touching with either end, apart, in one line.
+    #[test]
+    fn pieces_cross_or_touch_in_any_position() {
+        let cases = [
+            ([[0.0, 0.0], [4.0, 0.0], [1.0, -1.0], [2.0, 3.0]], true),
+            ([[0.0, 0.0], [4.0, 0.0], [1.0, 0.0], [2.0, 3.0]], true),
+            ([[0.0, 0.0], [4.0, 0.0], [2.0, 3.0], [1.0, 0.0]], true),
+            ([[0.0, 0.0], [4.0, 0.0], [4.0, -1.0], [4.0, 3.0]], true),
+            ([[0.0, 0.0], [4.0, 0.0], [1.0, 1.0], [2.0, 3.0]], false),
+            ([[0.0, 0.0], [4.0, 0.0], [5.0, -1.0], [6.0, 3.0]], false),
+            ([[0.0, 0.0], [4.0, 0.0], [3.0, 0.0], [7.0, 0.0]], true),
+            ([[0.0, 0.0], [4.0, 0.0], [5.0, 0.0], [7.0, 0.0]], false),
+        ];
+        // Quarter turns, mirrors and moves by whole numbers: touching stays exact.
+        let moves: [fn([f64; 2]) -> [f64; 2]; 4] = [
+            |p| p,
+            |p| [7.0 - p[1], 3.0 + p[0]],
+            |p| [2.0 * p[0] - p[1] - 9.0, p[0] + 2.0 * p[1] + 5.0],
+            |p| [3.0 - p[0], p[1] - 8.0],
+        ];
+        for (ends, expected) in cases {
+            for moved in moves {
+                let [a, b, c, d] = ends.map(moved);
+                for found in [cross(a, b, c, d), cross(b, a, c, d), cross(c, d, a, b), cross(d, c, b, a)] {
+                    assert_eq!(found, expected, "{a:?} {b:?} {c:?} {d:?}");
+                }
+            }
+        }
+    }
+
+    /// A piece whose end the last piece, upright, runs through: they share one abscissa alone.
+    #[test]
+    fn pieces_that_share_one_abscissa_are_compared() {
+        let points = [[0.0, 0.0], [1.0, 0.0], [0.5, -2.0], [1.0, -1.0], [1.0, 1.0]];
+        assert!(crossings(&points, &places(5)).is_err());
+        let apart = [[0.0, 0.0], [1.0, 0.0], [0.5, -2.0], [1.1, -1.0], [1.1, 1.0]];
+        assert!(crossings(&apart, &places(5)).is_ok());
+    }
+
+    /// Points nearer than a thousand-millionth of the section's size are one, whatever the unit of the list.
+    #[test]
+    fn repeats_are_told_in_any_unit() {
+        for size in [1e-3, 1.0, 1e3] {
+            let list = |off: f64| [[size, 0.0], [0.5 * size, 0.1 * size], [0.5 * size, (0.1 + off) * size]];
+            assert!(repeats(&list(1e-10), &places(3)).is_err(), "{size}");
+            assert!(repeats(&list(1e-8), &places(3)).is_ok(), "{size}");
+        }
+    }
+
+    /// A move, a turn and a change of size: the nose comes to (0, 0), the middle of the edge to (1, 0), and all
+    /// distances change alike.
+    #[test]
+    fn reframing_is_a_similarity() {
+        let points = [[1.0, 0.02], [0.3, 0.2], [-0.3, 0.1], [0.4, -0.1], [0.9, -0.04]];
+        let (found, turn) = reframe(&points, points[2]);
+        let edge = [0.95, -0.01];
+        let size = (edge[0] + 0.3_f64).hypot(edge[1] - 0.1);
+        assert!(found[2][0].hypot(found[2][1]) < 1e-12);
+        assert!((0.5 * (found[0][0] + found[4][0]) - 1.0).abs() < 1e-12);
+        assert!((found[0][1] + found[4][1]).abs() < 1e-12);
+        assert!((turn - 0.11_f64.atan2(1.25)).abs() < 1e-12, "{turn}");
+        let far = |p: [f64; 2], q: [f64; 2]| (p[0] - q[0]).hypot(p[1] - q[1]);
+        for (i, j) in [(0, 1), (1, 3), (0, 4), (2, 3)] {
+            assert!((far(found[i], found[j]) * size - far(points[i], points[j])).abs() < 1e-12, "{i} {j}");
+        }
+    }
+}

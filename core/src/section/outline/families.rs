@@ -166,3 +166,84 @@ fn from_table(name: &str, rows: &[[f64; 3]], flat_from: f64) -> Result<Outline, 
     }));
     Outline::from_points(name, &points)
 }
+
+#[cfg(test)]
+mod tests {
+    use super::super::{interpolate, sides};
+    use super::*;
+
+    /// Compares a section with points laid out by the report's rule, `x ∓ yt sin θ`, `yc ± yt cos θ`, with the
+    /// slope of the mean line taken from its own heights.
+    fn same_as_laid_out(section: &Outline, mean: impl Fn(f64) -> f64, half: impl Fn(f64) -> f64, held: f64) {
+        let lay = |x: f64, side: f64| {
+            let (at, d) = (x.clamp(held, 1.0 - held), 1e-6);
+            let run = [(at - d).max(0.0), (at + d).min(1.0)];
+            let theta = ((mean(run[1]) - mean(run[0])) / (run[1] - run[0])).atan();
+            [x - side * half(x) * theta.sin(), mean(x) + side * half(x) * theta.cos()]
+        };
+        let places: Vec<f64> = stations().collect();
+        let upper = places.iter().rev().map(|&x| lay(x, 1.0));
+        let points: Vec<[f64; 2]> = upper.chain(places.iter().skip(1).map(|&x| lay(x, -1.0))).collect();
+        let expected = Outline::from_points("", &points).unwrap();
+        for (a, b) in section.points().iter().zip(expected.points()) {
+            // The slope by differences is good to 1e-6 where the mean line has no kink.
+            assert!((a[0] - b[0]).hypot(a[1] - b[1]) < 2e-6, "{} {a:?} {b:?}", section.name());
+        }
+    }
+
+    /// NACA Report 460: parabolas that meet at the place of the camber; NACA Report 824: the mean line a = 1.
+    #[test]
+    fn thickness_is_laid_square_to_the_mean_line() {
+        let four = naca_four_digit(4, 4, 0.12).unwrap();
+        let parabolas = |x: f64| {
+            if x < 0.4 { 0.04 / 0.16 * (0.8 * x - x * x) } else { 0.04 / 0.36 * (0.2 + 0.8 * x - x * x) }
+        };
+        let half = |x: f64| {
+            let series =
+                0.2969 * x.sqrt() - 0.1260 * x - 0.3516 * x.powi(2) + 0.2843 * x.powi(3) - 0.1015 * x.powi(4);
+            0.6 * series
+        };
+        same_as_laid_out(&four, parabolas, half, 0.0);
+        let sixteen = naca_16_series(1.0, 0.12).unwrap();
+        let log = |x: f64| if x > 0.0 { x * x.ln() } else { 0.0 };
+        let line = |x: f64| -(log(1.0 - x) + log(x)) / (4.0 * PI);
+        let half = |x: f64| {
+            let aft = 1.0 - x;
+            let front = 0.989_665 * x.sqrt() - 0.239_25 * x - 0.041 * x.powi(2) - 0.5594 * x.powi(3);
+            0.12 * if x < 0.5 { front } else { 0.01 + 2.325 * aft - 3.42 * aft.powi(2) + 1.46 * aft.powi(3) }
+        };
+        same_as_laid_out(&sixteen, line, half, 0.005);
+    }
+
+    /// Ordinates of the 16-009 in hundredths, NACA TN 1546 (1948), from memory; printed to a thousandth.
+    #[test]
+    fn the_sixteen_series_has_its_published_ordinates() {
+        const PRINTED: [[f64; 2]; 15] = [
+            [1.25, 0.969],
+            [2.5, 1.354],
+            [5.0, 1.882],
+            [7.5, 2.274],
+            [10.0, 2.593],
+            [15.0, 3.101],
+            [20.0, 3.498],
+            [30.0, 4.063],
+            [40.0, 4.391],
+            [50.0, 4.500],
+            [60.0, 4.376],
+            [70.0, 3.952],
+            [80.0, 3.149],
+            [90.0, 1.888],
+            [95.0, 1.061],
+        ];
+        let (upper, lower) = sides(naca_16_series(0.0, 0.09).unwrap().points());
+        for [x, y] in PRINTED {
+            // Half the last figure printed, and what the chords between 80 stations cut off, `y'' h^2/8`: 0.0038 at
+            // 1.25 where the nose runs as the root of x, up to 0.003 elsewhere.
+            let allowed = 4.5e-3;
+            let found = 100.0 * interpolate(&upper, x / 100.0);
+            assert!((found - y).abs() < allowed, "{x}: {found} {y}");
+            // The nose is found to the root of the rounding error.
+            assert!((found + 100.0 * interpolate(&lower, x / 100.0)).abs() < 1e-4, "{x}");
+        }
+    }
+}

@@ -140,3 +140,51 @@ fn moments(points: &[[f64; 2]]) -> [f64; 6] {
     let (cx, cy) = (sum[1] / area, sum[2] / area);
     [area, cx, cy, sum[3] - area * cy * cy, sum[4] - area * cx * cx, sum[5] - area * cx * cy]
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::section::outline::naca_four_digit;
+
+    /// A right triangle of legs 3 and 2, away from the origin: area 3, centroid a third in from the right angle,
+    /// `b h³/36`, `h b³/36` and `−b² h²/72` about it (tables of any textbook of statics; from memory).
+    #[test]
+    fn moments_of_a_right_triangle() {
+        let (b, h, at): (f64, f64, [f64; 2]) = (3.0, 2.0, [5.0, -4.0]);
+        let corners = [[at[0], at[1]], [at[0] + b, at[1]], [at[0], at[1] + h]];
+        let expected = [
+            0.5 * b * h,
+            at[0] + b / 3.0,
+            at[1] + h / 3.0,
+            b * h.powi(3) / 36.0,
+            h * b.powi(3) / 36.0,
+            -(b * h).powi(2) / 72.0,
+        ];
+        for (found, expected) in moments(&corners).into_iter().zip(expected) {
+            assert!((found - expected).abs() < 1e-9, "{found} {expected}");
+        }
+    }
+
+    /// NACA Report 460: digits 4 and 4 are a camber of 4 % at 40 % of the chord, over the line from the beginning of
+    /// the mean line. The chord line here begins at the nose itself, the front of a circle of radius 1.1019 t^2 whose
+    /// centre lies on the mean line: above that beginning by the radius times the first slope.
+    #[test]
+    fn camber_is_that_of_the_digits() {
+        for (camber, place) in [(4, 4), (2, 6), (6, 3)] {
+            let m = *naca_four_digit(camber, place, 0.06).unwrap().measures();
+            let (ratio, at) = (f64::from(camber) / 100.0, f64::from(place) / 10.0);
+            let nose = 1.1019 * 0.06_f64.powi(2) * (2.0 * ratio / at).atan().sin();
+            // Stations are a 400th apart, thickness laid square to the mean line moves the heights between them.
+            assert!((m.camber_ratio - ratio + (1.0 - at) * nose).abs() < 1e-4, "{m:?}");
+            assert!((m.camber_at - at).abs() < 0.015, "{m:?}");
+        }
+    }
+
+    #[test]
+    fn a_side_is_held_beyond_its_ends() {
+        let side = [[0.0, 0.1], [0.5, 0.2], [1.0, 0.0]];
+        for (x, expected) in [(-0.3, 0.1), (0.25, 0.15), (0.75, 0.1), (1.0, 0.0), (1.04, 0.0)] {
+            assert!((interpolate(&side, x) - expected).abs() < 1e-15, "{x}");
+        }
+    }
+}

@@ -190,7 +190,7 @@ fn nose_stalled(layer: &Layer) -> bool {
 }
 
 /// Abscissa and arc length of all nodes.
-fn stations(body: &Strip, wake: &Strip) -> (Vec<f64>, Vec<f64>) {
+pub(super) fn stations(body: &Strip, wake: &Strip) -> (Vec<f64>, Vec<f64>) {
     let (mut x, mut arc) = (Vec::new(), Vec::new());
     for strip in [body, wake] {
         let mut run = 0.0;

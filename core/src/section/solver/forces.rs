@@ -51,3 +51,19 @@ pub(super) fn forces(body: &Strip, layer: &Layer, alpha_rad: f64) -> Forces {
     let cd = 2.0 * theta * speed.powf(0.5 * (layer.shape(last) + 5.0));
     Forces { cl, cd, cm }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// Karman, Tsien: `Cp/(beta + M^2 Cp/(2 (1 + beta)))`, which is `2/(1 + beta)` where the flow is at rest since
+    /// `M^2 = (1 - beta)(1 + beta)`; nothing at the speed of the stream.
+    #[test]
+    fn pressure_is_that_of_karman_and_tsien() {
+        for mach in [0.0, 0.3, 0.6] {
+            let beta = (1.0_f64 - mach * mach).sqrt();
+            assert!((pressure(0.0, mach) - 2.0 / (1.0 + beta)).abs() < 1e-12, "{mach}");
+            assert!(pressure(1.0, mach).abs() < 1e-12 && pressure(1.3, mach) < -0.69);
+        }
+    }
+}

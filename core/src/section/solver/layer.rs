@@ -150,9 +150,8 @@ impl Layer {
     }
 
     /// After a change of the speeds: nodes beside the stagnation point whose speed has turned change side.
-    pub(super) fn follow_stagnation(&mut self) -> bool {
+    pub(super) fn follow_stagnation(&mut self) {
         let (low, high) = (2, self.course.body - 4);
-        let start = self.stagnation;
         while self.stagnation > low && self.state[self.stagnation][3] <= 0.0 {
             self.flip(self.stagnation);
             self.set_stagnation(self.stagnation - 1);
@@ -164,7 +163,6 @@ impl Layer {
         for state in &mut self.state {
             state[3] = state[3].max(1e-6);
         }
-        self.stagnation != start
     }
 
     fn flip(&mut self, node: usize) {

@@ -1,5 +1,11 @@
 //! Whole polars. Potential flow and boundary layer alone are held against exact ones in the outside checks.
 
+mod closures;
+mod flow;
+mod intervals;
+mod newton;
+mod tables;
+
 use std::ops::ControlFlow;
 
 use super::*;
