@@ -1,4 +1,4 @@
-//! How much room a text takes. Widths are those of Helvetica's own metrics, which every PDF viewer has and
+//! How much room a text takes, and how it is cut and led over lines to fit one. Widths are those of Helvetica's own metrics, which every PDF viewer has and
 //! which the sans serif faces of browsers follow closely.
 
 use super::{Anchor, Text};
@@ -57,5 +57,51 @@ impl Text {
             Anchor::Middle => -0.5 * self.breadth_mm(),
             Anchor::End => -self.breadth_mm(),
         }
+    }
+}
+
+/// A text cut to a room.
+pub(crate) fn fitted(words: &str, size_mm: f64, room_mm: f64) -> String {
+    if breadth_mm(words, size_mm) <= room_mm {
+        return words.to_string();
+    }
+    let mut cut: String = words.to_string();
+    while !cut.is_empty() && breadth_mm(&cut, size_mm) + size_mm > room_mm {
+        cut.pop();
+    }
+    format!("{}…", cut.trim_end())
+}
+
+/// A text in lines of a width; a word that is too long is cut.
+pub(crate) fn wrapped(words: &str, size_mm: f64, room_mm: f64) -> Vec<String> {
+    let mut all: Vec<String> = Vec::new();
+    let mut line = String::new();
+    for word in words.split_whitespace() {
+        let longer = if line.is_empty() { word.to_string() } else { format!("{line} {word}") };
+        if breadth_mm(&longer, size_mm) <= room_mm {
+            line = longer;
+        } else {
+            if !line.is_empty() {
+                all.push(line);
+            }
+            line = fitted(word, size_mm, room_mm);
+        }
+    }
+    all.push(line);
+    all
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    #[test]
+    fn lines_are_as_wide_as_their_room_and_keep_every_word() {
+        let words = "A table; on the next page its headings stand again, and nothing of the text is lost.";
+        let all = wrapped(words, 3.0, 40.0);
+        assert_eq!(all.join(" "), words);
+        assert!(all.iter().all(|line| breadth_mm(line, 3.0) <= 40.0) && all.len() > 2);
+        assert!(wrapped(&"x".repeat(200), 3.0, 40.0)[0].ends_with('…'));
+        assert_eq!(wrapped("", 3.0, 40.0), [""]);
     }
 }

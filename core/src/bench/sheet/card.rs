@@ -1,7 +1,7 @@
 //! The job card: one page with all that the bench must know.
 
-use crate::bench::draw::{Anchor, Drawing, Layer};
-use crate::bench::page::{Leaf, fitted, wrapped};
+use crate::bench::draw::{Anchor, Drawing, Layer, fitted, wrapped};
+use crate::bench::page::Leaf;
 use crate::bench::stock::{Stock, name};
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
