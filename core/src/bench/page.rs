@@ -1,10 +1,11 @@
-//! Sheets of paper: their size and what stands on every one of them. Large drawings are laid over several ([`parts`]).
+//! Sheets of paper: their size and what stands on every one of them. Large drawings are laid over several
+//! ([`parts`]).
 
 mod parts;
 
 use crate::caution::CAUTION_COUNT;
 
-use super::draw::{Anchor, Drawing, Layer, breadth_mm, fitted};
+use super::draw::{Anchor, BOLD, Drawing, Layer, breadth_mm, fitted};
 use parts::laid;
 
 /// What every sheet says at its foot.
@@ -114,7 +115,7 @@ pub fn lay(
         if let Some(words) = warning {
             let room = paper.size_mm()[0] - 2.0 * MARGIN_MM;
             let at = [MARGIN_MM, above + 6.4];
-            sheet.frame.bold(at, WARNING_MM, Anchor::Start, fitted(words, 1.08 * WARNING_MM, room));
+            sheet.frame.bold(at, WARNING_MM, Anchor::Start, fitted(words, BOLD * WARNING_MM, room));
         }
     }
     sheets
@@ -144,8 +145,8 @@ fn furniture(sheet: &mut Sheet, title: &str, number: &str, cautions: &Cautions) 
     let frame = &mut sheet.frame;
     frame.text([right, top - 3.5], 3.0, Anchor::End, number);
     let room = right - left - breadth_mm(number, 3.0) - 6.0;
-    frame.bold([left, top - 3.5], 3.6, Anchor::Start, fitted(&format!("{}  ", sheet.name), 3.6 * 1.08, room));
-    let named = breadth_mm(&sheet.name, 3.6) * 1.08 + 4.0;
+    frame.bold([left, top - 3.5], 3.6, Anchor::Start, fitted(&format!("{}  ", sheet.name), 3.6 * BOLD, room));
+    let named = breadth_mm(&sheet.name, 3.6) * BOLD + 4.0;
     if room - named > 20.0 {
         frame.text([left + named, top - 3.5], 3.0, Anchor::Start, fitted(title, 3.0, room - named));
     }

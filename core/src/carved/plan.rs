@@ -1,11 +1,13 @@
 //! The removals that best restore departure and even the blades.
 //!
 //! At each radius the wanted angle is the one that gives the drawn blade's departure with the chord and
-//! thickness the plan leaves, in the balance of that element at the flight point's condition as drawn. Within
-//! what planing can reach ([`super::plane`]) each blade takes the angle of least squares both from the wanted
-//! one and from the mean of the blades; chord and thickness likewise, from the drawn ones. What one blade can
-//! give at one radius is in [`super::piece`]. Small differences that no plane would set right are left, and
-//! nothing is cut where a blade was not read: beyond its outermost readings, and nowhere where one has none.
+//! thickness the plan leaves, in the balance of that element at the flight point's condition as drawn; where
+//! the factor of tip and hub leaves little load, as for a twist ([`LEAST_FACTOR`]), it is the drawn one.
+//! Within what planing can reach ([`super::plane`]) each blade takes the angle of least squares both from the
+//! wanted one and from the mean of the blades; chord and thickness likewise, from the drawn ones. What one
+//! blade can give at one radius is in [`super::piece`]. Small differences that no plane would set right are
+//! left, and nothing is cut where a blade was not read: beyond its outermost readings, and nowhere where one
+//! has none.
 
 use super::CarvedError;
 use super::even::evened;
@@ -19,9 +21,7 @@ use crate::report::best_of;
 use crate::result::{Known, PlannedBlade, PlannedStation, RemovalPlan};
 use crate::rig::{Rig, air_of};
 use crate::rotor::Condition;
-
-/// Least factor of tip and hub at which the wanted angle is solved; nearer to the ends it is the drawn one.
-const LEAST_FACTOR: f64 = 0.35;
+use crate::shape::LEAST_FACTOR;
 
 /// The flight point a plan is judged at without one named: the first in flight that has an answer, else the
 /// first that has one.

@@ -1,5 +1,6 @@
-//! How much room a text takes, and how it is cut and led over lines to fit one. Widths are those of Helvetica's own metrics, which every PDF viewer has and
-//! which the sans serif faces of browsers follow closely.
+//! How much room a text takes, and how it is cut and led over lines to fit one. Widths are those of
+//! Helvetica's own metrics, which every PDF viewer has and which the sans serif faces of browsers follow
+//! closely.
 
 use super::{Anchor, Text};
 
@@ -12,8 +13,18 @@ const HELVETICA: [u16; 95] = [
     556, 333, 556, 556, 500, 556, 556, 278, 556, 556, 222, 222, 500, 222, 833, 556, 556, 556, 556, 333, 500,
     278, 556, 500, 722, 500, 500, 500, 334, 260, 334, 584,
 ];
-/// Bold letters are wider by about so much.
-const BOLD: f64 = 1.08;
+/// Bold letters are wider by about so much: by the metrics of Helvetica-Bold 4.8 % over all characters, 9.2 %
+/// over English prose.
+pub(crate) const BOLD: f64 = 1.08;
+/// How far letters reach above the line they stand on and below it, of the size: f and g of Helvetica (728
+/// and 220 thousandths, Adobe's font metrics).
+const ABOVE: f64 = 0.73;
+const BELOW: f64 = 0.22;
+/// Height of capitals, of the size (718 thousandths).
+pub(crate) const CAPITALS: f64 = 0.72;
+/// Half the height of small letters without ascenders, of the size (523 thousandths): a line of text stands
+/// so far below what it is to be level with.
+pub(crate) const HALF_SMALL: f64 = 0.26;
 
 /// Width of a text of size 1.
 fn advance_mm(words: &str) -> f64 {
@@ -40,7 +51,7 @@ impl Text {
     /// Lower left and upper right corner of its box, mm.
     pub(crate) fn corners(&self) -> [[f64; 2]; 2] {
         let [left, foot] = [self.at[0] + self.left_mm(), self.at[1]];
-        [[left, foot - 0.22 * self.size_mm], [left + self.breadth_mm(), foot + 0.73 * self.size_mm]]
+        [[left, foot - BELOW * self.size_mm], [left + self.breadth_mm(), foot + ABOVE * self.size_mm]]
     }
 
     /// Its width, mm.
