@@ -159,8 +159,8 @@ fn more_elements_change_little() {
         Rig::new(&job).unwrap().rotor.loads(&at).thrust_n
     };
     let (coarse, fine) = (thrust(40), thrust(320));
-    println!("MM more elements {:e}", (coarse / fine - 1.0).abs());
-    assert!((coarse / fine - 1.0).abs() < 1e-3, "{coarse} {fine}");
+    // 1.6e-5 comes out.
+    assert!((coarse / fine - 1.0).abs() < 5e-5, "{coarse} {fine}");
 }
 
 /// A protractor on the flat face reads less than the chord line by the section's own angle.
