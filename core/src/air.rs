@@ -14,6 +14,8 @@ pub const G0_M_S2: f64 = 9.806_65;
 pub const RHO0_KG_M3: f64 = 1.225;
 /// Specific gas constant of dry air, J/(kg K).
 const GAS_CONSTANT: f64 = 287.052_87;
+/// Ratio of the specific heats, and of the standard atmosphere of ISO 2533 temperature and pressure at sea
+/// level, the lapse of temperature, and the tropopause: its geopotential height and its temperature.
 const HEAT_RATIO: f64 = 1.4;
 const T0_K: f64 = 288.15;
 const P0_PA: f64 = 101_325.0;

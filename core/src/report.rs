@@ -9,7 +9,8 @@ use crate::rotor::element::{Balance, Element};
 use crate::rotor::{Coefficients, Condition, Loads, Ring, Rotor};
 use crate::section::{Best, Situation, best, working_band};
 
-/// Mach number above which the corrections are not to be relied on.
+/// Mach number above which the corrections are not to be relied on: from about there shocks decide of lift
+/// and drag (common practice).
 const LARGEST_MACH: f64 = 0.85;
 
 /// A flight point with its condition known.

@@ -8,15 +8,17 @@ mod chart;
 mod fit;
 mod limit;
 mod logbook;
+mod removal;
 mod search;
 mod shape;
 mod strength;
 mod verdict;
+mod vibration;
 
 pub use crate::job::Figure;
 pub use carved::{
     Carved, CarvedBlade, CarvedPoint, CarvedStation, CarvedStrength, Doubt, Known, LoadOf, MassOf,
-    OncePerTurn, PlannedBlade, PlannedStation, Read, RemovalPlan, StaticBalance, StationDeparture,
+    OncePerTurn, Read, StaticBalance, StationDeparture,
 };
 pub use chart::{ChartCell, Cost, ErrorCosts, PitchDiameter, Tolerance};
 pub use fit::{
@@ -25,13 +27,15 @@ pub use fit::{
 };
 pub use limit::{Limit, Margin};
 pub use logbook::{Change, Estimate, FactorFound, LogLine, Logged, Means, Pair};
+pub use removal::{PlannedBlade, PlannedStation, RemovalPlan};
 pub use search::{AimResult, FreeValue, Search, Stopped};
 pub use shape::{Bound, Brief, Compared, LeastLoss, LossStation, Origin, Twist, TwistStation};
 pub use strength::{
-    CaseFigures, CaseKind, CaseResult, FrequencyLine, Governing, HubResult, Mass, MaterialUsed, ModeKind,
-    NearOrder, RunningStation, RunningTwist, Strength, StressKind, StressStation, Vibration,
+    CaseFigures, CaseKind, CaseResult, Governing, HubResult, Mass, MaterialUsed, RunningStation,
+    RunningTwist, Strength, StressKind, StressStation,
 };
 pub use verdict::{Finding, Verdict};
+pub use vibration::{FrequencyLine, ModeKind, NearOrder, Vibration};
 
 /// All that is known of a job's flight points.
 #[derive(Clone, Debug, PartialEq, Serialize)]

@@ -74,7 +74,8 @@ fn the_face_line_touches_the_section_and_never_cuts_into_it() {
             let tabled = bench.form.blade.face_to_chord_rad(station.ring.radius_m).unwrap();
             let thin = station.thickness_m < 0.2 * station.chord_m;
             assert!(
-                !thin || (station.angle_rad - tabled - face_rad).abs() < 3e-3,
+                // What leading over between the tabled thicknesses leaves is 1e-5.
+                !thin || (station.angle_rad - tabled - face_rad).abs() < 3e-5,
                 "station {}",
                 station.number
             );
@@ -114,13 +115,15 @@ fn the_edges_keep_their_thickness_and_the_chord_its_angle() {
         let p = &station.ring.points;
         let (a, b) = (p[1], p[p.len() - 1]);
         let thick = (a[0] - b[0]).hypot(a[1] - b[1]);
-        assert!((thick - 0.002).abs() < 2e-5, "{thick}");
+        // A micrometre, which no tool cuts; half of one comes out.
+        assert!((thick - 0.002).abs() < 1e-6, "{thick}");
         let (lead, trail) = (station.ring.leading_edge(), station.ring.trailing_edge());
         let angle = (lead[1] - trail[1]).atan2(lead[0] - trail[0]);
         // Thickening on one side moves the middle of the edge by half of what is added.
         assert!((angle - station.angle_rad).abs() < 0.03, "{angle}");
         let long = (lead[1] - trail[1]).hypot(lead[0] - trail[0]);
-        assert!((long / station.chord_m - 1.0).abs() < 1e-3, "{long}");
+        // It runs between the middles of the edges, one of which thickening has moved: 2e-4 comes out.
+        assert!((long / station.chord_m - 1.0).abs() < 3e-4, "{long}");
     }
 }
 
@@ -136,7 +139,8 @@ fn a_blunter_nose_holds_the_circle_asked_for() {
     let side = |p: [f64; 2], q: [f64; 2]| (p[0] - q[0]).hypot(p[1] - q[1]);
     let twice = ((b[0] - a[0]) * (c[1] - a[1]) - (c[0] - a[0]) * (b[1] - a[1])).abs();
     let radius = side(a, b) * side(b, c) * side(c, a) / (2.0 * twice);
-    assert!((radius / 0.0012 - 1.0).abs() < 0.05, "{radius}");
+    // Three points of a circle give its radius; 2e-5 comes out.
+    assert!((radius / 0.0012 - 1.0).abs() < 1e-4, "{radius}");
 }
 
 #[test]

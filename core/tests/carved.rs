@@ -43,11 +43,12 @@ fn blades_as_drawn_do_what_the_drawing_does() {
     assert_eq!(found.doubts, []);
     for (i, p) in found.flight_points.iter().enumerate() {
         let (drawn, carved) = (p.drawn.rpm.unwrap(), p.carved.rpm.unwrap());
-        assert!((drawn - carved).abs() < 1e-3, "{drawn} {carved}");
+        // The same blade by another road: but for rounding the same figures.
+        assert!((drawn - carved).abs() < 1e-9, "{drawn} {carved}");
         let thrust: f64 = p.blades.iter().map(|b| b.thrust_n).sum();
         let torque: f64 = p.blades.iter().map(|b| b.torque_n_m).sum();
         let whole = rig.rotor.loads(&rig.condition(i).unwrap());
-        assert!((thrust - whole.thrust_n).abs() < 1e-3 && (torque - whole.torque_n_m).abs() < 1e-3);
+        assert!((thrust - whole.thrust_n).abs() < 1e-9 && (torque - whole.torque_n_m).abs() < 1e-9);
         let once = p.once_per_turn.unwrap();
         assert!(once.moment_n_m < 1e-6 && once.air_force_n < 1e-6 && once.mass_force_n.unwrap() < 1e-6);
     }
@@ -71,7 +72,7 @@ fn unequal_masses_shake_by_their_moment_times_the_square_of_the_speed() {
     }
     let found = carved::analyse(&Rig::new(&job).unwrap()).unwrap();
     let even = found.balance.blades[1].moment_kg_m;
-    assert!((found.balance.unbalance_kg_m / even - 0.0201).abs() < 1e-4, "{:?}", found.balance);
+    assert!((found.balance.unbalance_kg_m / even - 0.0201).abs() < 1e-9, "{:?}", found.balance);
     assert_eq!(found.balance.heavy_blade, Some(1));
     for p in &found.flight_points {
         let omega = p.carved.rpm.unwrap() * TAU / 60.0;
@@ -121,7 +122,8 @@ fn a_blade_of_larger_angle_carries_more_and_the_sum_is_that_of_the_mean() {
     let p = &found.flight_points[2];
     assert!(p.blades[0].thrust_n > p.blades[1].thrust_n + 1.0);
     let sum: f64 = p.blades.iter().map(|b| b.thrust_n).sum();
-    assert!((sum / p.carved.thrust_n.unwrap() - 1.0).abs() < 0.01, "{sum} {:?}", p.carved);
+    // Half a degree either way, to second order: 4e-4 comes out.
+    assert!((sum / p.carved.thrust_n.unwrap() - 1.0).abs() < 1e-3, "{sum} {:?}", p.carved);
     let once = p.once_per_turn.unwrap();
     let moment = p.blades[0].bending_n_m - p.blades[1].bending_n_m;
     assert!((once.moment_n_m - moment).abs() < 1e-9 && once.mass_force_n.unwrap() < 1e-6);
@@ -144,6 +146,6 @@ fn a_blade_carved_thin_is_held_to_its_own_strength() {
     let least =
         |off: f64| carved::analyse(&carved_by(|b, _| [0.0, 0.0, b as f64 * off])).unwrap().strength.unwrap();
     let (drawn, thin) = (least(0.0), least(-2.5));
-    assert!((drawn.margin - drawn.drawn_margin.unwrap()).abs() < 1e-3, "{drawn:?}");
+    assert!((drawn.margin - drawn.drawn_margin.unwrap()).abs() < 1e-9, "{drawn:?}");
     assert!(thin.blade == 2 && thin.margin < 0.0 && thin.says().starts_with("Not strong enough"), "{thin:?}");
 }

@@ -30,7 +30,8 @@ fn angles_between_readings_are_recovered_and_said_to_be_interpolated() {
     let found = carved::analyse(&Rig::new(&job).unwrap()).unwrap();
     for (s, station) in found.blades[0].stations.iter().enumerate() {
         let drawn = truth.rotor.blade.cut(station.radius_m).angle_rad.to_degrees();
-        assert!((station.angle_deg.carved - drawn - twist(s)).abs() < 0.05, "{station:?}");
+        // What the cubic through every other reading leaves of the bend is 0.01°.
+        assert!((station.angle_deg.carved - drawn - twist(s)).abs() < 0.02, "{station:?}");
         let known = if s.is_multiple_of(2) { Known::Measured } else { Known::Interpolated };
         assert_eq!(station.angle_deg.known, known);
     }

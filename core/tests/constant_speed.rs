@@ -49,7 +49,8 @@ fn each_speed_is_the_answer_of_a_flight_point_at_stops_and_between() {
     for p in found.points.iter().filter(|p| p.full.is_some()) {
         job.flight_points = vec![full(Some(p.airspeed_m_s))];
         let (f, alone) = (p.full.as_ref().unwrap(), Rig::new(&job).unwrap().point(0).unwrap());
-        let near = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 2e-5, "{}: {a} {b}", p.airspeed_m_s);
+        // Two roads to one root, each left where its last step is small: 8e-7 comes out.
+        let near = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 2e-6, "{}: {a} {b}", p.airspeed_m_s);
         if !f.held_at_limit {
             near(f.rpm, alone.rpm.unwrap());
             near(f.thrust_n, alone.meeting.total_thrust_n.unwrap());
@@ -65,7 +66,7 @@ fn at_a_stop_it_is_the_propeller_turned_to_that_stop() {
         (p.rpm.unwrap(), p.figures.thrust_n.unwrap())
     };
     let ((rpm, thrust), (of_rpm, of_thrust)) = (at_30(governed(2850.0, 0.0, 1.0)), at_30(turned(0.0)));
-    assert!(rpm < 2850.0 && (rpm / of_rpm - 1.0).abs() < 1e-6 && (thrust / of_thrust - 1.0).abs() < 1e-6);
+    assert!(rpm < 2850.0 && (rpm / of_rpm - 1.0).abs() < 1e-12 && (thrust / of_thrust - 1.0).abs() < 1e-12);
 }
 
 #[test]

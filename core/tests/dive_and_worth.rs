@@ -35,7 +35,8 @@ fn in_the_dive_the_propeller_freewheels_at_the_limit_rpm() {
         rig.rotor.loads(&at).torque_n_m
     };
     let v = dive.airspeed_m_s;
-    assert!(torque(v, 3300.0).abs() < 1e-3 * torque(0.0, 3300.0));
+    // What the root leaves: 1.4e-6 N m.
+    assert!(torque(v, 3300.0).abs() < 1e-7 * torque(0.0, 3300.0));
     assert!(torque(0.99 * v, 3300.0) > 0.0 && torque(1.01 * v, 3300.0) < 0.0);
 }
 
@@ -72,7 +73,8 @@ fn the_dive_follows_limit_rpm_and_pitch() {
     let Some(Engine::Piston(piston)) = &mut slower.engine else { panic!("a piston engine") };
     piston.max_rpm = Some(2900.0);
     let ratio = dive_m_s(&slower).unwrap() / at_3300;
-    assert!((ratio / (2900.0 / 3300.0) - 1.0).abs() < 0.02, "{ratio}");
+    // At the same advance ratio only the Reynolds and Mach numbers differ: 0.3 % comes out.
+    assert!((ratio / (2900.0 / 3300.0) - 1.0).abs() < 0.005, "{ratio}");
     let mut coarser = job.clone();
     coarser.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: 4.0 };
     assert!(dive_m_s(&coarser).unwrap() > 1.1 * at_3300);
@@ -132,7 +134,8 @@ fn a_blade_turned_to_its_best_gains_nothing_more() {
     let mut turned = job.clone();
     turned.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: first.turn_deg.unwrap() };
     let again = pitch_worth(&Rig::new(&turned).unwrap(), &climb).unwrap();
-    assert!(again.gain.unwrap() < 1e-3, "{again:?}");
+    // None is found: the steps round a top end on it.
+    assert!(again.gain.unwrap() < 1e-9, "{again:?}");
     let worth = |p| pitch_worth(&Rig::new(&job).unwrap(), &p).unwrap().turn_deg.unwrap();
     let (rest, fast) =
         (worth(point(Some(0.0), Setting::FullThrottle {})), worth(point(None, Setting::FullThrottle {})));

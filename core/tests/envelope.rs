@@ -37,7 +37,8 @@ fn each_speed_is_the_answer_of_a_flight_point() {
         job.flight_points[1].setting = Setting::Level {};
         let rig = Rig::new(&job).unwrap();
         let (throttled, level) = (rig.point(0).unwrap(), rig.point(1).unwrap());
-        let near = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 1e-5, "{}: {a} {b}", p.airspeed_m_s);
+        // Two roads to one root, each left where its last step is small: 2e-6 comes out.
+        let near = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 5e-6, "{}: {a} {b}", p.airspeed_m_s);
         let f = p.full.as_ref().unwrap();
         near(f.rpm, throttled.rpm.unwrap());
         near(f.thrust_n, throttled.meeting.total_thrust_n.unwrap());
@@ -71,6 +72,7 @@ fn no_curve_jumps() {
         assert!(rpm.len() > 100, "{}: {} answers", job.title, rpm.len());
         for (name, curve) in [("rpm", &rpm), ("thrust", &thrust)] {
             let most = curve.iter().fold(0.0_f64, |m, v| m.max(v.abs()));
+            // A curve that fell evenly to nothing over 120 speeds would lose 0.8 % from one to the next.
             for w in curve.windows(2) {
                 assert!((w[1] - w[0]).abs() < 0.03 * most, "{}: {name} {w:?}", job.title);
             }
@@ -113,7 +115,7 @@ fn past_the_limit_rpm_the_figure_held_at_it_is_given_beside_the_state() {
         assert!(held.meeting.power_share.unwrap() < 1.0);
         if i == 0 {
             let thrust = held.meeting.total_thrust_n.unwrap();
-            assert!((thrust / held.meeting.asked_n.unwrap() - 1.0).abs() < 1e-3);
+            assert!((thrust / held.meeting.asked_n.unwrap() - 1.0).abs() < 1e-6);
         }
     }
     let marks = range(&job, 60).marks;
@@ -136,7 +138,8 @@ fn what_is_past_the_limit_at_rest_need_not_be_in_flight() {
     for f in &told {
         let most = shaft.available_w(f.rpm, &air).unwrap();
         assert!(f.power_w <= most * (1.0 + 1e-6), "{} of {most} W at {} rpm", f.power_w, f.rpm);
-        assert!(f.held_at_limit || (f.power_w / most - 1.0).abs() < 1e-5, "{f:?}");
+        // Met by a root, which leaves 1e-7.
+        assert!(f.held_at_limit || (f.power_w / most - 1.0).abs() < 1e-6, "{f:?}");
     }
     let held: Vec<bool> = told.iter().map(|f| f.held_at_limit).collect();
     let first_matched = held.iter().position(|h| !h).unwrap();
@@ -166,8 +169,8 @@ fn marks_do_not_depend_on_the_count_of_speeds() {
             assert_eq!(few.is_some(), many.is_some(), "{index}: {few:?} {many:?}");
             if let (Some(few), Some(many)) = (few, many) {
                 compared += 1;
-                // What a parabola through three of twenty speeds leaves of a flat top.
-                assert!((few.value / many.value - 1.0).abs() < 3e-3, "{index}: {few:?} {many:?}");
+                // What a parabola through three of twenty speeds leaves of a flat top: 7e-4 comes out.
+                assert!((few.value / many.value - 1.0).abs() < 1e-3, "{index}: {few:?} {many:?}");
             }
         }
     }
@@ -238,7 +241,8 @@ fn at_the_service_ceiling_the_best_climb_is_half_a_metre_per_second() {
         let got = envelope(&rig, &there, 80, &[]).unwrap();
         let best =
             got.points.iter().filter_map(|p| p.full.as_ref()?.rate_of_climb_m_s).fold(f64::MIN, f64::max);
-        assert!((best - climb).abs() < 0.02, "{best} at {height}");
+        // A ceiling is sought to half a metre, in which the climb falls by 3e-4 m/s.
+        assert!((best - climb).abs() < 5e-4, "{best} at {height}");
     }
 }
 
@@ -264,9 +268,11 @@ fn ceilings_are_those_of_the_speeds_that_are_flown() {
             climb.max(there.unwrap_or(f64::MIN))
         };
         let (got, expected) = (found.sea_level_climb_m_s.unwrap(), best(0.0));
-        assert!((got - expected).abs() < 0.03 * expected, "{}: {got} {expected}", job.title);
+        // Tops of parabolas through speeds of a different spacing: 1e-3 m/s comes out.
+        assert!((got - expected).abs() < 2e-3, "{}: {got} {expected}", job.title);
         if let Some(service) = found.service_m {
-            assert!((best(service) - 0.5).abs() < 0.03, "{}: {} at {service}", job.title, best(service));
+            // As above, half a metre.
+            assert!((best(service) - 0.5).abs() < 5e-4, "{}: {} at {service}", job.title, best(service));
         }
     }
 }
@@ -329,8 +335,9 @@ fn the_roll_is_that_of_thrust_less_drag_and_friction_step_by_step_in_time() {
         time += step;
         v = faster;
     }
-    assert!((t.ground_roll_m / way - 1.0).abs() < 2e-3, "{t:?} {way}");
-    assert!((t.ground_roll_s / time - 1.0).abs() < 2e-3, "{t:?} {time}");
+    // Here straight lines between sixty speeds for the curve through them: 5e-5 comes out.
+    assert!((t.ground_roll_m / way - 1.0).abs() < 1e-4, "{t:?} {way}");
+    assert!((t.ground_roll_s / time - 1.0).abs() < 1e-4, "{t:?} {time}");
     // From there energy: 15 m and the gain of speed, over what thrust and drag leave of the weight at both
     // ends.
     let Some(Aircraft::Aeroplane(a)) = &job.aircraft else { panic!("an aeroplane") };
@@ -338,7 +345,7 @@ fn the_roll_is_that_of_thrust_less_drag_and_friction_step_by_step_in_time() {
     let slope = |v: f64| (thrust(v) - drag_n(a, &air, v).unwrap()) / (430.0 * 9.806_65);
     let height = 15.0 + (t.screen_m_s.powi(2) - t.lift_off_m_s.powi(2)) / (2.0 * 9.806_65);
     let airborne = height / (0.5 * (slope(t.lift_off_m_s) + slope(t.screen_m_s)));
-    assert!(((t.distance_to_15_m - t.ground_roll_m) / airborne - 1.0).abs() < 2e-3, "{t:?} {airborne}");
+    assert!(((t.distance_to_15_m - t.ground_roll_m) / airborne - 1.0).abs() < 1e-4, "{t:?} {airborne}");
 }
 
 /// A blade whose tip passes the Mach numbers of note within the range.
@@ -354,7 +361,7 @@ fn where_the_tip_passes_a_mach_number_it_has_it() {
     for mark in passed {
         job.flight_points = vec![full(Some(mark.airspeed_m_s))];
         let found = Rig::new(&job).unwrap().point(0).unwrap().figures.tip_mach.unwrap();
-        // A straight line between two of sixty speeds.
-        assert!((found / mark.tip_mach - 1.0).abs() < 1e-3, "{mark:?} {found}");
+        // A straight line between two of sixty speeds: 2e-6 comes out.
+        assert!((found / mark.tip_mach - 1.0).abs() < 1e-5, "{mark:?} {found}");
     }
 }

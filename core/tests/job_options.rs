@@ -64,9 +64,10 @@ fn parts_in_the_slipstream_take_their_share_of_the_thrust() {
     let air = air_of(&level).unwrap();
     let drag = drag_n(aeroplane(&mut job), &air, 45.0).unwrap();
     let flown = answer(&job, level).meeting;
-    assert!((flown.total_thrust_n.unwrap() / (drag / kept) - 1.0).abs() < 1e-5);
+    // Met by a root, which leaves 2e-9 of the thrust, and of the climb as little.
+    assert!((flown.total_thrust_n.unwrap() / (drag / kept) - 1.0).abs() < 1e-7);
     assert!((flown.asked_n.unwrap() / (drag / kept) - 1.0).abs() < 1e-12);
-    assert!(flown.rate_of_climb_m_s.unwrap().abs() < 1e-3);
+    assert!(flown.rate_of_climb_m_s.unwrap().abs() < 1e-6);
     let climbing = point(Some(28.0), Setting::FullThrottle {});
     let (with, without) = (answer(&job, climbing.clone()).meeting, answer(&free, climbing).meeting);
     let thrust = with.total_thrust_n.unwrap();

@@ -151,9 +151,10 @@ fn without_noise_a_known_propeller_factor_is_found_exactly() {
     (widths.engine_power, widths.drag_area, widths.propeller_power, widths.consumption) =
         (1.0, 1.0, 1.0, 1e-4);
     let found = logged(&known).estimate;
-    assert!((found.factors.engine_power / 0.95 - 1.0).abs() < 2e-3, "{found:?}");
-    assert!((found.factors.drag_area / 1.08 - 1.0).abs() < 2e-3, "{found:?}");
-    assert!((found.factors.propeller_power / 1.04 - 1.0).abs() < 2e-3, "{found:?}");
+    // Read without error; what was believed before, so wide, holds them back by 3e-5.
+    assert!((found.factors.engine_power / 0.95 - 1.0).abs() < 1e-4, "{found:?}");
+    assert!((found.factors.drag_area / 1.08 - 1.0).abs() < 1e-4, "{found:?}");
+    assert!((found.factors.propeller_power / 1.04 - 1.0).abs() < 1e-4, "{found:?}");
 }
 
 #[test]
@@ -196,13 +197,14 @@ fn one_reading_gives_the_closed_form() {
     let (one, four) = (quotient(1), quotient(4));
     let k = (four - one) / (one - four / 4.0);
     let m = one * (1.0 + k);
-    assert!((quotient(9) / (m * 9.0 / (9.0 + k)) - 1.0).abs() < 2e-3);
+    // The part in a thousand of the slopes.
+    assert!((quotient(9) / (m * 9.0 / (9.0 + k)) - 1.0).abs() < 1e-3);
     let w2 = 0.05_f64.powi(2);
     let e = many(1);
     let (deviation, prior) = (e.found[0].deviation, w2);
     // By symmetry each factor keeps half the sum's variance and half the quotient's: (2w² + 2w² k/(1 + k))/4.
     let closed = (2.0 * prior + 2.0 * prior * k / (1.0 + k)) / 4.0;
-    assert!((deviation.powi(2) / closed - 1.0).abs() < 2e-3, "{deviation} {closed}");
+    assert!((deviation.powi(2) / closed - 1.0).abs() < 1e-3, "{deviation} {closed}");
 }
 
 #[test]
@@ -219,7 +221,8 @@ fn a_wrong_reading_is_flagged_with_a_likely_cause_and_left_out() {
     assert_eq!(flagged, [4], "{:?}", found.readings);
     assert!(found.readings[4].remark.contains("number of blades or pulses"), "{:?}", found.readings[4]);
     assert_eq!(found.readings[7].remark, "left out");
-    assert!((found.estimate.factors.engine_power / clean.engine_power - 1.0).abs() < 0.005);
+    // Two of ten readings less: 4e-5 comes out.
+    assert!((found.estimate.factors.engine_power / clean.engine_power - 1.0).abs() < 2e-4);
 }
 
 #[test]
@@ -249,8 +252,9 @@ fn a_motor_s_current_tells_the_propeller_s_power() {
     let mut job = with_readings(&job, readings);
     job.logbook.as_mut().unwrap().widths.consumption = 1e-3;
     let found = logged(&job).estimate;
-    assert!((found.factors.propeller_power / 1.06 - 1.0).abs() < 0.01, "{found:?}");
-    assert!((found.factors.engine_power / 0.97 - 1.0).abs() < 0.01, "{found:?}");
+    // Read without error; what was believed before holds them back by 0.3 %.
+    assert!((found.factors.propeller_power / 1.06 - 1.0).abs() < 0.005, "{found:?}");
+    assert!((found.factors.engine_power / 0.97 - 1.0).abs() < 0.005, "{found:?}");
 }
 
 /// A run below the governed rpm has the blades on the fine stop, so that it tells as much as one of a fixed
@@ -278,7 +282,8 @@ fn a_governed_propeller_tells_on_its_fine_stop() {
     let mut job = with_readings(&job, readings);
     job.logbook.as_mut().unwrap().widths.propeller_power = 1e-3;
     let found = logged(&job);
-    assert!((found.estimate.factors.engine_power / 0.95 - 1.0).abs() < 0.01, "{:?}", found.estimate);
+    // As above; 0.2 %.
+    assert!((found.estimate.factors.engine_power / 0.95 - 1.0).abs() < 0.005, "{:?}", found.estimate);
     assert!(found.readings[6].remark.contains("governed rpm") && found.readings[6].off.is_none());
     assert!(found.readings[..6].iter().all(|l| l.off.is_some()), "{:?}", found.readings);
 }
@@ -316,7 +321,8 @@ fn sheets_are_read_with_units_and_faults_have_line_and_column() {
         (ground.temperature_c.unwrap() - 15.0).abs() < 1e-6
             && (ground.altitude_m.unwrap() - 457.2).abs() < 1e-6
     );
-    assert!(level.level && (level.airspeed_m_s - 47.586).abs() < 0.001);
+    // Written here with three decimals.
+    assert!(level.level && (level.airspeed_m_s - 47.586).abs() < 5e-4);
     let cases = [
         ("throttle\nfull", "line 1: no column rpm"),
         ("rpm,airspeed\n2900,40", "line 1, column 2: \"airspeed\" needs its unit"),
@@ -391,7 +397,8 @@ fn changes_reach_what_is_wanted_and_tell_the_rest() {
     let found = changes(&rig, &wanted).unwrap();
     for c in &found {
         assert!(c.reached, "{c:?}");
-        assert!((c.had.unwrap() - wanted.value).abs() < 0.1, "{c:?}");
+        // Met by a root, which leaves 1e-6 rpm.
+        assert!((c.had.unwrap() - wanted.value).abs() < 1e-4, "{c:?}");
         assert_eq!((c.flight_points.len(), c.by_removal), (4, false));
     }
     let of = |m: Means| found.iter().find(|c| c.means == m).unwrap();
@@ -436,7 +443,8 @@ fn wood_is_only_taken_off() {
     assert!((short.job.propeller.diameter_m - 1.42).abs() < 1e-12);
     for r in [0.2, 0.4, 0.6, 0.69] {
         let (a, b) = (short.rotor.blade.cut(r), mean.rotor.blade.cut(r));
-        assert!((a.angle_rad - b.angle_rad).abs() < 2e-3 && (a.chord_m - b.chord_m).abs() < 2e-4, "{r}");
+        // Cubics through other places at the tip; 1e-6 comes out.
+        assert!((a.angle_rad - b.angle_rad).abs() < 1e-5 && (a.chord_m - b.chord_m).abs() < 1e-5, "{r}");
     }
     let _: fn(&spokeshave::rotor::Condition) -> f64 = fit::rpm_of;
 }

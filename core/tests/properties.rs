@@ -144,20 +144,23 @@ fn thrust_is_gone_before_power_is() {
     let (rig, at) = demo_at(0.0, 2700.0);
     let curve = rig.curves(0, 40);
     let last = curve.last().unwrap();
-    assert!(last.coefficients.ct.abs() < 1e-4 && last.coefficients.cp > 0.0, "{last:?}");
+    // The curve ends where a root has the thrust gone.
+    assert!(last.coefficients.ct.abs() < 1e-9 && last.coefficients.cp > 0.0, "{last:?}");
     assert!(at.airspeed_m_s == 0.0);
 }
 
 #[test]
 fn more_elements_change_little() {
     let mut job = Job::from_json(DEMOS[0].json).unwrap();
+    // The same condition for both: level flight would ask the same thrust of any.
+    let at = Rig::new(&job).unwrap().condition(2).unwrap();
     let mut thrust = |elements: u32| {
         job.method.elements = elements;
-        let rig = Rig::new(&job).unwrap();
-        rig.rotor.loads(&rig.condition(2).unwrap()).thrust_n
+        Rig::new(&job).unwrap().rotor.loads(&at).thrust_n
     };
     let (coarse, fine) = (thrust(40), thrust(320));
-    assert!((coarse / fine - 1.0).abs() < 1e-3, "{coarse} {fine}");
+    // 1.6e-5 comes out.
+    assert!((coarse / fine - 1.0).abs() < 5e-5, "{coarse} {fine}");
 }
 
 /// A protractor on the flat face reads less than the chord line by the section's own angle.

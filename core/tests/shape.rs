@@ -43,7 +43,8 @@ fn every_station_of_a_twisted_blade_works_at_its_best_angle() {
             let radii = shaped.rotor.blade.station_radii_m();
             for r in radii.filter(|r| judged(r / shaped.rotor.blade.radius_m)) {
                 let off = shaped.rotor.departure_deg(&shaped.rotor, r, &at).unwrap();
-                assert!(off.abs() < 0.05, "{} {} at {r} m: {off}", rig.job.title, point.name);
+                // Angles rest at 1e-6 rad, 6e-5°.
+                assert!(off.abs() < 1e-3, "{} {} at {r} m: {off}", rig.job.title, point.name);
             }
         }
     }
@@ -70,7 +71,7 @@ fn a_slow_propellers_outer_stations_work_at_their_best_angle_too() {
     let outer = result.stations.last().unwrap();
     assert!(judged(outer.radius_fraction) && outer.loss_factor.unwrap() < 0.35, "{outer:?}");
     for s in result.stations.iter().filter(|s| judged(s.radius_fraction)) {
-        assert!(s.departure_deg.unwrap().abs() < 0.05, "{} R: {:?}", s.radius_fraction, s.departure_deg);
+        assert!(s.departure_deg.unwrap().abs() < 1e-3, "{} R: {:?}", s.radius_fraction, s.departure_deg);
     }
 }
 
@@ -123,9 +124,9 @@ fn stations_of_a_governed_propeller_depart_alike() {
         .map(|s| s.departure_deg.unwrap())
         .collect();
     let mean = all.iter().sum::<f64>() / all.len() as f64;
-    assert!(all.iter().all(|d| (d - mean).abs() < 0.05), "{all:?}");
+    assert!(all.iter().all(|d| (d - mean).abs() < 1e-3), "{all:?}");
     let told = shaped.result.governor_departure_deg.unwrap();
-    assert!((told - mean).abs() < 0.05, "{told} {mean}");
+    assert!((told - mean).abs() < 1e-3, "{told} {mean}");
     assert!(shaped.result.sentence().contains(&format!("{told:+.2}°")), "{}", shaped.result.sentence());
 }
 
@@ -148,7 +149,7 @@ fn a_blade_measured_on_its_flat_face_comes_out_the_same() {
     let (a, b) = (demo(0), Rig::new(&on_face).unwrap());
     let (a, b) = (twist(&a, &alone(&a, 2)).unwrap(), twist(&b, &alone(&b, 2)).unwrap());
     for (a, b) in a.result.stations.iter().zip(&b.result.stations) {
-        assert!((a.angle_deg - b.angle_deg).abs() < 1e-3, "{} {}", a.angle_deg, b.angle_deg);
+        assert!((a.angle_deg - b.angle_deg).abs() < 1e-6, "{} {}", a.angle_deg, b.angle_deg);
     }
     assert_eq!(b.job.propeller.angle_reference, AngleReference::FlatFace);
 }
@@ -204,8 +205,8 @@ fn the_chords_of_a_least_loss_blade_run_smoothly_at_low_reynolds_numbers() {
 }
 
 /// Adkins and Liebeck's equations are those of the blade elements but for hub loss and the inflow angle in
-/// Prandtl's factor: without hub loss 0.2 % in thrust and power (own analysis). That takes stations close
-/// together and out to the tip, where the chord ends in nothing.
+/// Prandtl's factor: without hub loss 0.3 % in thrust and 0.2 % in power (measured here). That takes stations
+/// close together and out to the tip, where the chord ends in nothing.
 #[test]
 fn a_least_loss_blade_analysed_anew_returns_its_design() {
     let mut job = demo(0).job;
@@ -225,8 +226,8 @@ fn a_least_loss_blade_analysed_anew_returns_its_design() {
     let asked =
         LossTask { point: 2, lift: Lift::Coefficient(0.6), least_chord_m: Some(1e-4), ..LossTask::default() };
     let r = least_loss(&rig, &asked).unwrap().result;
-    assert!((r.analysed_thrust_n / r.thrust_n - 1.0).abs() < 0.005, "{} {}", r.analysed_thrust_n, r.thrust_n);
-    assert!((r.analysed_power_w / r.power_w - 1.0).abs() < 0.005, "{} {}", r.analysed_power_w, r.power_w);
+    assert!((r.analysed_thrust_n / r.thrust_n - 1.0).abs() < 0.004, "{} {}", r.analysed_thrust_n, r.thrust_n);
+    assert!((r.analysed_power_w / r.power_w - 1.0).abs() < 0.003, "{} {}", r.analysed_power_w, r.power_w);
 }
 
 /// At the design's own rpm and power (the blades turned to hold both), no chord or angle of a station changed
@@ -255,7 +256,8 @@ fn no_small_change_of_a_least_loss_blade_gains_anything_worth_having() {
             angle.propeller.stations[i].angle_deg = held.propeller.stations[i].angle_deg.map(|a| a * factor);
             for (what, changed) in [("chord", chord), ("angle", angle)] {
                 let gain = efficiency(&changed) / own - 1.0;
-                assert!(gain < 5e-4, "{what} of station {i} times {factor}: {gain}");
+                // The 0.3 % by which design and elements differ; 2e-4 comes out.
+                assert!(gain < 3e-4, "{what} of station {i} times {factor}: {gain}");
             }
         }
     }
@@ -343,8 +345,9 @@ fn top_speed_over_pitch_and_diameter_is_that_of_each_blade_alone() {
             };
             let (led, alone) = (&cell.as_ref().unwrap().figures, brief(&alone, &point));
             held[usize::from(led.held_at_limit)] += 1;
+            // Two roads to one root, each left where its last step is small: 6e-7 comes out.
             let same = |led: Option<f64>, alone: Option<f64>| match (led, alone) {
-                (Some(led), Some(alone)) => (led / alone - 1.0).abs() < 2e-5,
+                (Some(led), Some(alone)) => (led / alone - 1.0).abs() < 2e-6,
                 (led, alone) => led.is_none() && alone.is_none(),
             };
             let all = led.held_at_limit == alone.held_at_limit

@@ -36,13 +36,16 @@ for station, lower, upper in zip(stations, cards[0::2], cards[1::2]):
     assert lower.is_valid and upper.is_valid, station["number"]
     upper = translate(upper, 0, -LIFT)
     pair = unary_union([lower.buffer(1e-4), upper.buffer(1e-4)])
+    # Cards that only touch share rounding, 5e-14 mm2; a hundredth is a strip as long as a card and thinner than a hair.
     assert lower.intersection(upper).area < 1e-2, "the cards lie over one another"
     left = [p for p in getattr(box(*pair.bounds).difference(pair), "geoms", [box(*pair.bounds).difference(pair)]) if p.area > 1]
     assert len(left) == 1, (station["number"], [p.area for p in left])
     wood, section = left[0], Polygon(station["points_mm"])
     off = wood.area / section.area - 1
-    assert abs(off) < 0.002, (station["number"], off)
+    # Cards are drawn by the section's own points, to 1e-4 mm all round (the buffer above): 2.5e-4 of the smallest comes out.
+    assert abs(off) < 5e-4, (station["number"], off)
     move = [section.bounds[k] - wood.bounds[k] for k in (0, 1)]
     apart = translate(wood, *move).hausdorff_distance(section)
-    assert apart < 0.05, (station["number"], apart)
+    # The same, 3e-4 mm.
+    assert apart < 1e-3, (station["number"], apart)
     print(f"station {station['number']}: {wood.area:.2f} mm2 between the cards, {100 * off:+.4f} %, apart {apart:.4f} mm")

@@ -6,6 +6,7 @@ pub mod browser;
 pub mod check;
 pub mod formula;
 pub mod goldstein;
+pub mod goldstein_table;
 pub mod judge;
 pub mod page;
 pub mod reference;

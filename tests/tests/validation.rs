@@ -5,6 +5,7 @@ use std::path::Path;
 
 use spokeshave::shape::adkins_liebeck::{Wanted, design};
 use spokeshave_tests::check::Check;
+use spokeshave_tests::goldstein_table;
 use spokeshave_tests::validation::{TOPICS, differences, list, rotor, section, shape, topic, tunnel};
 
 /// Fails where a check misses, or a known miss does not.
@@ -134,5 +135,32 @@ fn the_list_is_up_to_date() {
             list::COMMAND,
             stale.join("\n")
         );
+    }
+}
+
+/// The committed table of Goldstein's factor is what its maker gives: its text; one column, made as the whole
+/// was; and all of them on a coarse grid, for the whole takes half an hour.
+#[test]
+fn the_table_of_goldsteins_factor_is_up_to_date() {
+    const COARSE: usize = 24;
+    /// What the coarse grid leaves, in the last decimal: 169 at the very tip, 39 elsewhere (measured), and
+    /// one for rounding.
+    const TIP: u32 = 170;
+    const INWARD: u32 = 40;
+    let committed = std::fs::read_to_string(goldstein_table::file()).unwrap();
+    let table = goldstein_table::read(&committed).unwrap();
+    let stale = "the table is stale: run `cargo run --release -p spokeshave-tests --bin goldstein`";
+    assert_eq!(goldstein_table::text(&table), committed, "{stale}");
+    let exact = goldstein_table::column(2, 7, goldstein_table::NODES);
+    assert_eq!(table[1][7], exact, "2 blades, column 7: {stale}");
+    for (blades, columns) in (1..).zip(&table) {
+        for (pitch, column) in columns.iter().enumerate() {
+            let rough = goldstein_table::column(blades, pitch, COARSE);
+            for (place, (told, rough)) in column.iter().zip(&rough).enumerate() {
+                let allowed = if place == 0 { TIP } else { INWARD };
+                let at = format!("{blades} blades, row {place}, column {pitch}: {told}, roughly {rough}");
+                assert!(told.abs_diff(*rough) <= allowed, "{at}; {stale}");
+            }
+        }
     }
 }

@@ -3,7 +3,7 @@
 
 mod text;
 
-pub(crate) use text::breadth_mm;
+pub(crate) use text::{BOLD, CAPITALS, HALF_SMALL, breadth_mm, fitted, wrapped};
 
 /// What a line is for; also its layer's name.
 #[derive(Clone, Copy, Debug, PartialEq, Eq, PartialOrd, Ord, Hash)]

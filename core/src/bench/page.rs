@@ -1,8 +1,12 @@
-//! Sheets of paper: their size, what stands on every one of them, and large drawings laid over several.
+//! Sheets of paper: their size and what stands on every one of them. Large drawings are laid over several
+//! ([`parts`]).
+
+mod parts;
 
 use crate::caution::CAUTION_COUNT;
 
-use super::draw::{Anchor, Drawing, Layer, breadth_mm};
+use super::draw::{Anchor, BOLD, Drawing, Layer, breadth_mm, fitted};
+use parts::laid;
 
 /// What every sheet says at its foot.
 pub(crate) type Cautions = [&'static str; CAUTION_COUNT];
@@ -26,10 +30,6 @@ const FOOT_MM: f64 = 28.0;
 const CAUTION_MM: f64 = 3.1;
 /// Size of a warning's letters, mm.
 const WARNING_MM: f64 = 3.0;
-/// By how much neighbouring sheets show the same, mm.
-const OVERLAP_MM: f64 = 12.0;
-/// Between parts side by side, mm.
-const GAP_MM: f64 = 6.0;
 
 impl Paper {
     /// Width and height, mm.
@@ -115,7 +115,7 @@ pub fn lay(
         if let Some(words) = warning {
             let room = paper.size_mm()[0] - 2.0 * MARGIN_MM;
             let at = [MARGIN_MM, above + 6.4];
-            sheet.frame.bold(at, WARNING_MM, Anchor::Start, fitted(words, 1.08 * WARNING_MM, room));
+            sheet.frame.bold(at, WARNING_MM, Anchor::Start, fitted(words, BOLD * WARNING_MM, room));
         }
     }
     sheets
@@ -139,130 +139,14 @@ pub fn bind(title: &str, pages: Vec<Leaf>, paper: Paper, cautions: &Cautions) ->
     pages.into_iter().enumerate().map(page).collect()
 }
 
-/// How a leaf is cut into parts that fit the room: their size, how many across and down.
-struct Cut {
-    low: [f64; 2],
-    high: [f64; 2],
-    part: [f64; 2],
-    count: [u32; 2],
-}
-
-impl Cut {
-    /// Lower left and upper right corner, in the leaf's millimetres, of what a part shows less half of what
-    /// it shares with its neighbours.
-    fn own(&self, place: [u32; 2]) -> [[f64; 2]; 2] {
-        let step = [0, 1].map(|a| self.part[a] - OVERLAP_MM);
-        let left = self.low[0] + f64::from(place[0]) * step[0];
-        let top = self.high[1] - f64::from(place[1]) * step[1];
-        let shared = |a: usize, later: bool| {
-            let neighbour = if later { place[a] + 1 < self.count[a] } else { place[a] > 0 };
-            if neighbour { 0.5 * OVERLAP_MM } else { 0.0 }
-        };
-        [
-            [left + shared(0, false), top - self.part[1] + shared(1, true)],
-            [left + self.part[0] - shared(0, true), top - shared(1, false)],
-        ]
-    }
-}
-
-fn cut(leaf: &Leaf, room: [f64; 2]) -> Option<Cut> {
-    let [low, high] = leaf.drawing.bounds()?;
-    let size = [high[0] - low[0], high[1] - low[1]];
-    let count = [0, 1].map(|a| {
-        let past = size[a] - room[a];
-        1 + (past / (room[a] - OVERLAP_MM) - 1e-9).ceil().max(0.0) as u32
-    });
-    Some(Cut { low, high, part: [0, 1].map(|a| size[a].min(room[a])), count })
-}
-
-/// Sheets that show a leaf, in rows from the top, less those on which only a guide line would stand; narrow
-/// parts of a long one stand side by side.
-fn laid(leaf: &Leaf, paper: Paper) -> Vec<Sheet> {
-    let (room, at) = (paper.room_mm(), paper.room_at_mm());
-    let Some(cut) = cut(leaf, room) else { return Vec::new() };
-    let [columns, rows] = cut.count;
-    let parts: Vec<[u32; 2]> =
-        (0..rows).flat_map(|row| (0..columns).map(move |column| [column, row])).collect();
-    let parts: Vec<[u32; 2]> = parts.into_iter().filter(|part| leaf.drawing.tells(cut.own(*part))).collect();
-    let abreast =
-        if columns == 1 { ((room[0] + GAP_MM) / (cut.part[0] + GAP_MM)).max(1.0) as usize } else { 1 };
-    let chunks: Vec<&[[u32; 2]]> = parts.chunks(abreast).collect();
-    chunks.iter().map(|chunk| sheet(leaf, &cut, chunk, paper.size_mm(), room, at)).collect()
-}
-
-fn sheet(
-    leaf: &Leaf,
-    cut: &Cut,
-    parts: &[[u32; 2]],
-    size_mm: [f64; 2],
-    room: [f64; 2],
-    at: [f64; 2],
-) -> Sheet {
-    let mut frame = Drawing::default();
-    let wide = parts.len() as f64 * (cut.part[0] + GAP_MM) - GAP_MM;
-    let mut x = at[0] + 0.5 * (room[0] - wide);
-    let mut views = Vec::new();
-    for &[column, row] in parts {
-        let step = [0, 1].map(|a| cut.part[a] - OVERLAP_MM);
-        let by = [
-            x - cut.low[0] - f64::from(column) * step[0],
-            at[1] + room[1] - cut.high[1] + f64::from(row) * step[1],
-        ];
-        let window_mm = [[x, at[1] + room[1] - cut.part[1]], [x + cut.part[0], at[1] + room[1]]];
-        joins(&mut frame, window_mm, [column, row], cut.count);
-        let mut drawing = Drawing::default();
-        drawing.add(&leaf.drawing, by);
-        views.push(View { drawing, window_mm });
-        x += cut.part[0] + GAP_MM;
-    }
-    let [columns, rows] = cut.count;
-    let [column, row] = [parts[0][0] + 1, parts[0][1] + 1];
-    let name = match (columns, rows, parts.len()) {
-        (1, 1, _) => leaf.name.clone(),
-        (1, _, 1) => format!("{}, part {row} of {rows} from the top", leaf.name),
-        (1, ..) => {
-            format!("{}, parts {row} to {} of {rows} from the top", leaf.name, parts[parts.len() - 1][1] + 1)
-        }
-        _ => format!("{}, row {row} of {rows}, column {column} of {columns}", leaf.name),
-    };
-    Sheet { name, size_mm, frame, views }
-}
-
-/// Joining lines in the middle of what two sheets share, with crosses: cut one sheet on the line, lay it on
-/// the other's.
-fn joins(frame: &mut Drawing, window: [[f64; 2]; 2], place: [u32; 2], count: [u32; 2]) {
-    let half = 0.5 * OVERLAP_MM;
-    let [low, high] = window;
-    let mut across = |axis: usize, v: f64| {
-        let point = |t: f64| if axis == 0 { [v, t] } else { [t, v] };
-        let (from, to) = (low[1 - axis], high[1 - axis]);
-        frame.line(Layer::Join, [point(from), point(to)]);
-        for share in [0.1, 0.5, 0.9] {
-            frame.cross(Layer::Ruler, point(from + share * (to - from)), 2.5);
-        }
-    };
-    if place[0] > 0 {
-        across(0, low[0] + half);
-    }
-    if place[0] + 1 < count[0] {
-        across(0, high[0] - half);
-    }
-    if place[1] > 0 {
-        across(1, high[1] - half);
-    }
-    if place[1] + 1 < count[1] {
-        across(1, low[1] + half);
-    }
-}
-
 fn furniture(sheet: &mut Sheet, title: &str, number: &str, cautions: &Cautions) {
     let [w, h] = sheet.size_mm;
     let (left, right, top) = (MARGIN_MM, w - MARGIN_MM, h - MARGIN_MM);
     let frame = &mut sheet.frame;
     frame.text([right, top - 3.5], 3.0, Anchor::End, number);
     let room = right - left - breadth_mm(number, 3.0) - 6.0;
-    frame.bold([left, top - 3.5], 3.6, Anchor::Start, fitted(&format!("{}  ", sheet.name), 3.6 * 1.08, room));
-    let named = breadth_mm(&sheet.name, 3.6) * 1.08 + 4.0;
+    frame.bold([left, top - 3.5], 3.6, Anchor::Start, fitted(&format!("{}  ", sheet.name), 3.6 * BOLD, room));
+    let named = breadth_mm(&sheet.name, 3.6) * BOLD + 4.0;
     if room - named > 20.0 {
         frame.text([left + named, top - 3.5], 3.0, Anchor::Start, fitted(title, 3.0, room - named));
     }
@@ -296,50 +180,4 @@ fn ruler(frame: &mut Drawing, [x, y]: [f64; 2]) {
         "This bar is 100 mm (3.937 in). Measure it before you cut.",
     );
     frame.text([x + 104.0, y + 2.9], 2.6, Anchor::Start, "Print at 100 %, never fitted to the page.");
-}
-
-/// A text cut to a room.
-pub(crate) fn fitted(words: &str, size_mm: f64, room_mm: f64) -> String {
-    if breadth_mm(words, size_mm) <= room_mm {
-        return words.to_string();
-    }
-    let mut cut: String = words.to_string();
-    while !cut.is_empty() && breadth_mm(&cut, size_mm) + size_mm > room_mm {
-        cut.pop();
-    }
-    format!("{}…", cut.trim_end())
-}
-
-/// A text in lines of a width; a word that is too long is cut.
-pub(crate) fn wrapped(words: &str, size_mm: f64, room_mm: f64) -> Vec<String> {
-    let mut all: Vec<String> = Vec::new();
-    let mut line = String::new();
-    for word in words.split_whitespace() {
-        let longer = if line.is_empty() { word.to_string() } else { format!("{line} {word}") };
-        if breadth_mm(&longer, size_mm) <= room_mm {
-            line = longer;
-        } else {
-            if !line.is_empty() {
-                all.push(line);
-            }
-            line = fitted(word, size_mm, room_mm);
-        }
-    }
-    all.push(line);
-    all
-}
-
-#[cfg(test)]
-mod tests {
-    use super::*;
-
-    #[test]
-    fn lines_are_as_wide_as_their_room_and_keep_every_word() {
-        let words = "A table; on the next page its headings stand again, and nothing of the text is lost.";
-        let all = wrapped(words, 3.0, 40.0);
-        assert_eq!(all.join(" "), words);
-        assert!(all.iter().all(|line| breadth_mm(line, 3.0) <= 40.0) && all.len() > 2);
-        assert!(wrapped(&"x".repeat(200), 3.0, 40.0)[0].ends_with('…'));
-        assert_eq!(wrapped("", 3.0, 40.0), [""]);
-    }
 }

@@ -6,7 +6,8 @@ use crate::job::{AngleReference, BladeReading};
 use crate::result::Doubt;
 use crate::rig::Rig;
 
-/// A carver is rarely farther off than this, degrees.
+/// A carver is rarely farther off than this, degrees. A choice, as those below: a reading that is doubted is
+/// left out only until it is confirmed.
 const FAR_DEG: f64 = 4.0;
 /// Two angles count as the same within this, degrees.
 const SAME_DEG: f64 = 1.0;

@@ -16,6 +16,7 @@ mod even;
 pub mod import;
 mod load;
 mod measured;
+mod piece;
 mod plan;
 mod plane;
 

@@ -1,8 +1,7 @@
 //! A chart as lines: two axes with round figures and their units, curves told apart by their strokes, a key
 //! under it.
 
-use crate::bench::draw::{Anchor, Drawing, Layer, breadth_mm};
-use crate::bench::page::fitted;
+use crate::bench::draw::{Anchor, Drawing, Layer, breadth_mm, fitted};
 
 use super::scale::{Scale, fixed};
 

@@ -1,7 +1,6 @@
 //! Headings, text, tables and charts under one another, page after page.
 
-use crate::bench::draw::{Anchor, Drawing, Layer};
-use crate::bench::page::{fitted, wrapped};
+use crate::bench::draw::{Anchor, Drawing, Layer, fitted, wrapped};
 use crate::bench::sheet::table::{Column, ROW_MM, head_mm, lines, table};
 use crate::bench::{Leaf, Paper};
 

@@ -20,10 +20,16 @@ use crate::rotor::Condition;
 const SERVICE_M_S: f64 = 0.5;
 /// Slowest speed looked at over that of least power, where no stall is known.
 const SLOWEST: f64 = 0.8;
-/// How far one speed looked at lies above the one before, as a share.
+/// How far one speed looked at lies above the one before, as a share. A parabola through three of them
+/// refines the best: the examples' ceilings are then within 0.04 m of those by steps of 0.02, less than what
+/// a ceiling is sought to; steps of 0.2 miss by up to 1.6 m.
 const STEP: f64 = 0.1;
-/// Speeds in a row without gain after which faster ones are not looked at.
+/// Speeds in a row without gain after which faster ones are not looked at. One would do for the examples,
+/// whose best climb has a single top; two more step over a dip a third of the speed wide, as a kink in an
+/// engine's or a section's table may make. To look on to the end gives them the same, in forty times the
+/// time.
 const MOST_VAIN: u32 = 3;
+/// How near a ceiling is sought, m: less than the metre it is told to.
 const CONVERGED_M: f64 = 0.5;
 
 /// The ceilings of an aeroplane at a temperature offset, as pressure altitudes between sea level and the end

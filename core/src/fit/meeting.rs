@@ -8,7 +8,9 @@ use crate::result::{Figures, Meeting, Note};
 use crate::rig::Rig;
 use crate::rotor::Condition;
 
-/// Share beyond the engine that counts as such: what is met by a root is not.
+/// Share beyond the engine that counts as such. What is met by a root is not: roots leave up to 1e-8 of the
+/// power at the examples' flight points, and up to 1e-5 of it where airspeed and rpm are sought together
+/// (`top_near::LEFT_OVER`); a thousandth is more than either and less than a rev counter shows.
 const BEYOND: f64 = 1e-3;
 
 /// The meeting at a condition, from the propeller's figures there.

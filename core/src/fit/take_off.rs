@@ -19,6 +19,8 @@ use crate::rotor::Condition;
 /// Rolling friction over weight where the job gives none: short grass or firm ground; common practice gives
 /// 0.02 (hard runway) to 0.1 (long grass).
 const ROLLING_FRICTION: f64 = 0.04;
+/// Speeds over that of the stall at which the wheels leave the ground and the screen is passed, and the
+/// height of the screen, m: common practice, as above.
 const LIFT_OFF: f64 = 1.2;
 const SCREEN: f64 = 1.3;
 const SCREEN_M: f64 = 15.0;

@@ -162,6 +162,7 @@ impl<'r> Equation<'r> {
 
     /// Residuals at a place and their slopes with each logarithm.
     pub(super) fn linear(&self, x: &[f64]) -> Option<(Vec<f64>, Vec<Vec<f64>>)> {
+        // Half of a difference of logarithms: its square, 1e-8, is what the curvature leaves of a slope.
         const H: f64 = 1e-4;
         let here = self.here(self.at)?;
         let at = |k: usize, by: f64| {

@@ -76,6 +76,7 @@ pub struct Flow {
 /// Cosine-spaced steps of the integrals.
 const STEPS: u32 = 240;
 const MOST_PASSES: u32 = 200;
+/// The design rests when ζ changes by no more, as a share: a few hundred roundings.
 const AT_REST: f64 = 1e-13;
 
 /// The design for sections whose drag over lift is given by `ξ`.

@@ -23,6 +23,7 @@ pub use error::ShapeError;
 pub use least_loss::{Lift, LossTask, least_loss};
 pub use limits::kept;
 pub use search::{FREE, Listener, Progress, Wish, search, usual_aims};
+pub(crate) use twist::LEAST_FACTOR;
 pub use twist::{TwistBy, twist, twist_by};
 
 use crate::job::Job;

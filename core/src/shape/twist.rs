@@ -24,10 +24,14 @@ use crate::rig::{Rig, air_of};
 use crate::rotor::Condition;
 use crate::rotor::element::{Balance, Element};
 
-/// Radius fractions between which every station with an answer is solved.
+/// Radius fractions between which every station with an answer is solved. The examples' blades have 6 to 8 %
+/// of their thrust outside of them at the tip and less than 1 % at the hub.
 const WORKING: RangeInclusive<f64> = 0.2..=0.95;
-/// Least factor of tip and hub at which one nearer to hub or tip is solved.
-const LEAST_FACTOR: f64 = 0.35;
+/// Least factor of tip and hub at which one nearer to hub or tip is solved. The less it is, the more the air
+/// there is turned for the same lift, and the coarser is the angle that gives it: on the examples' blades it
+/// is up to 1.6° more than at 0.95 R where the factor is 0.35, but 3 to 6° more at 0.995 R, where it is 0.1
+/// to 0.15 and the pitch that is held would have it finer.
+pub(crate) const LEAST_FACTOR: f64 = 0.35;
 /// Angles rest when none changes by more, rad.
 const AT_REST_RAD: f64 = 1e-6;
 const MOST_PASSES: u32 = 120;

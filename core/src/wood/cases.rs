@@ -8,7 +8,8 @@ use crate::result::{CaseKind, State};
 use crate::rig::{Rig, air_of, rotation_rad_s};
 use crate::rotor::Condition;
 
-/// Airspeeds of the dive that are looked at, m/s.
+/// Airspeeds of the dive that are looked at, m/s: from one to the next, and the last, the speed of sound at
+/// sea level.
 const STEP_M_S: f64 = 5.0;
 const FASTEST_M_S: f64 = 340.0;
 const HALVINGS: u32 = 20;

@@ -100,6 +100,7 @@ pub fn material(wood: &Wood) -> Result<Material, WoodError> {
 
 /// A limit in the units of either bench.
 fn said(limit_pa: f64) -> String {
+    // A pound-force per square inch, as it is defined.
     const PSI_PA: f64 = 6894.757;
     format!("{:.1} MPa ({:.0} psi)", limit_pa / 1e6, limit_pa / PSI_PA)
 }

@@ -11,6 +11,9 @@ const TESTS: [&str; 3] = ["test", "--release", "--workspace"];
 /// Where the random jobs of the property tests begin, unless the environment says otherwise: the same run
 /// twice has the same outcome.
 const SEED: (&str, &str) = ("PROPTEST_RNG_SEED", "1");
+/// How many tests of a program run at once, unless the environment says otherwise: one more than two cores, for
+/// a test of a browser spends half its time waiting.
+const AT_ONCE: (&str, &str) = ("RUST_TEST_THREADS", "3");
 
 /// Compiles the tests of all crates.
 pub(crate) fn compile(workspace: &Workspace) -> Result<()> {
@@ -24,8 +27,10 @@ pub(crate) fn all(workspace: &Workspace, page: Option<&Path>) -> Result<Option<T
     if let Some(page) = page {
         cargo.env("SPOKESHAVE_PAGE", page);
     }
-    if std::env::var_os(SEED.0).is_none() {
-        cargo.env(SEED.0, SEED.1);
+    for (name, value) in [SEED, AT_ONCE] {
+        if std::env::var_os(name).is_none() {
+            cargo.env(name, value);
+        }
     }
     let mut process = cargo.spawn()?;
     let mut tests = None;

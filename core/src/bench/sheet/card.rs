@@ -1,7 +1,7 @@
 //! The job card: one page with all that the bench must know.
 
-use crate::bench::draw::{Anchor, Drawing, Layer};
-use crate::bench::page::{Leaf, fitted, wrapped};
+use crate::bench::draw::{Anchor, BOLD, Drawing, Layer, fitted, wrapped};
+use crate::bench::page::Leaf;
 use crate::bench::stock::{Stock, name};
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
@@ -24,7 +24,7 @@ pub(super) fn leaf(bench: &Bench, unit: Unit, room: [f64; 2]) -> Leaf {
     drawing.line(Layer::Thin, [[0.0, -9.0], [room[0], -9.0]]);
     let mut y = -12.0;
     if let Some(warning) = bench.warning() {
-        for line in wrapped(&warning, 1.08 * WARNING_MM, room[0]) {
+        for line in wrapped(&warning, BOLD * WARNING_MM, room[0]) {
             drawing.bold([0.0, y - WARNING_MM], WARNING_MM, Anchor::Start, line);
             y -= 1.4 * WARNING_MM;
         }

@@ -5,7 +5,7 @@
 //! card, clear of its words; where no length of it that is worth laying a protractor on is free, there is
 //! none.
 
-use crate::bench::draw::{Drawing, Item, Layer, Text};
+use crate::bench::draw::{Drawing, HALF_SMALL, Item, Layer, Text};
 use crate::bench::work::{Bench, Carved};
 
 use super::template::{Card, SMALLEST_MM, Side};
@@ -71,7 +71,7 @@ fn named(
     let places = shifts.flat_map(|t| [[t, 1.0], [-t, 1.0], [t, -1.0], [-t, -1.0]]);
     let labels = places.map(|[t, side]| {
         let at = [0, 1].map(|a| middle[a] + t * along[a] + side * beside * out[a]);
-        Text { at: [at[0], at[1] - 0.26 * SMALLEST_MM], ..Text::plain(name, SMALLEST_MM) }
+        Text { at: [at[0], at[1] - HALF_SMALL * SMALLEST_MM], ..Text::plain(name, SMALLEST_MM) }
     });
     let fits = |label: &Text| {
         let [low, high] = label.corners();

@@ -1,7 +1,7 @@
 //! Bench heights of the edges, and the protractor table.
 
-use crate::bench::draw::Drawing;
-use crate::bench::page::{Leaf, wrapped};
+use crate::bench::draw::{Drawing, wrapped};
+use crate::bench::page::Leaf;
 use crate::bench::unit::Unit;
 use crate::bench::work::{Bench, Carved};
 

@@ -1,7 +1,6 @@
 //! Tables on paper.
 
-use crate::bench::draw::{Anchor, Drawing, Layer};
-use crate::bench::page::fitted;
+use crate::bench::draw::{Anchor, Drawing, Layer, fitted};
 
 /// Height of a row, mm.
 pub(crate) const ROW_MM: f64 = 5.6;

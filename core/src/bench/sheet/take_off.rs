@@ -1,7 +1,7 @@
 //! What to take off the carved blades: one leaf for each, in figures that are read at arm's length.
 
-use crate::bench::draw::{Anchor, Drawing};
-use crate::bench::page::{Leaf, wrapped};
+use crate::bench::draw::{Anchor, Drawing, wrapped};
+use crate::bench::page::Leaf;
 use crate::bench::unit::Unit;
 use crate::bench::work::Bench;
 use crate::result::{CarvedStrength, PlannedBlade, PlannedStation, RemovalPlan};

@@ -7,8 +7,8 @@
 //! the datum: square to the axis and at the same distance from the blank at every station, so that a
 //! straight-edge over several cards shows a twist that is out.
 
-use crate::bench::draw::{Anchor, Drawing, Item, Layer, Text, breadth_mm};
-use crate::bench::page::{Leaf, wrapped};
+use crate::bench::draw::{Anchor, Drawing, Item, Layer, Text, breadth_mm, wrapped};
+use crate::bench::page::Leaf;
 use crate::bench::unit::Unit;
 use crate::bench::work::{Bench, Carved};
 

@@ -3,7 +3,7 @@
 
 use std::fmt::Write;
 
-use crate::bench::draw::{Anchor, Drawing, Item, Layer};
+use crate::bench::draw::{Anchor, CAPITALS, Drawing, Item, Layer};
 
 /// Layer of texts.
 const TEXT_LAYER: &str = "TEXT";
@@ -116,8 +116,8 @@ fn entity(out: &mut String, item: &Item) {
             group(out, 0, "TEXT");
             group(out, 8, TEXT_LAYER);
             point(out, 10, text.at);
-            // Height of capitals, about 0.72 of the body.
-            group(out, 40, format!("{:.4}", 0.72 * text.size_mm));
+            // The format gives the height of capitals.
+            group(out, 40, format!("{:.4}", CAPITALS * text.size_mm));
             group(out, 1, plain(&text.words));
             let across = match text.anchor {
                 Anchor::Start => 0,

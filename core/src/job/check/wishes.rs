@@ -4,6 +4,8 @@ use super::super::document::{FlightPoint, Limits, RpmLimit, Wishes};
 use super::super::found::Found;
 
 const MOST_AIMS: usize = 50;
+/// Propeller rpm that may be asked for: from hardly turning to more than the smallest propellers do (common
+/// practice).
 const RPM: std::ops::RangeInclusive<f64> = 1.0..=100_000.0;
 
 pub(super) fn check_wishes(found: &mut Found, wishes: &Wishes, points: &[FlightPoint]) {
