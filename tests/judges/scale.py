@@ -17,8 +17,9 @@ def ruler_mm(page):
 def judged(name, page, size):
     """The page has the size and its ruler is 100 mm long; gives that length."""
     found = [page.rect.width * POINT, page.rect.height * POINT]
-    # The program's own sheets are within 2e-5 mm; 0.4 mm is a point and a little, for browsers may print pages of whole ones.
-    assert all(abs(a - b) < 0.4 for a, b in zip(found, size)), (name, found)
+    # The program's own sheets are within 2e-5 mm; Firefox prints pages of whole points: A4 as 596 by 842, 0.26 mm
+    # wider than asked. So one point is allowed.
+    assert all(abs(a - b) < POINT for a, b in zip(found, size)), (name, found)
     long = ruler_mm(page)
     # Less than a pencil line; on the program's own sheets 4e-6 mm comes out.
     assert abs(long - 100) < 0.1, (name, long)

@@ -35,8 +35,8 @@ pub enum JobError {
         /// Its size.
         found_bytes: usize,
     },
-    /// The text is not JSON.
-    #[error("line {line}, column {column}: not JSON: {message}")]
+    /// The text is not JSON, or has a key twice in one place.
+    #[error("line {line}, column {column}: {message}")]
     Syntax {
         /// Line, from 1.
         line: usize,

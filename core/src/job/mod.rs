@@ -88,7 +88,9 @@ fn syntax_error(file: &str, e: &serde_json::Error) -> JobError {
         Some((what, _)) => what,
         None => &text,
     };
-    JobError::Syntax { line: e.line(), column: e.column(), message: message.into() }
+    // What is JSON and refused all the same has a key twice (`once`).
+    let message = if e.is_data() { message.into() } else { format!("not JSON: {message}") };
+    JobError::Syntax { line: e.line(), column: e.column(), message }
 }
 
 fn shape_error(e: &serde_path_to_error::Error<serde_json::Error>) -> JobError {
