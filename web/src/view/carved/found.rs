@@ -125,7 +125,7 @@ fn brief_row(
     };
     html! {
         <tr>
-            <th scope="row">{ if point.is_none() { b.name.clone() } else { String::new() } }</th>
+            if point.is_none() { <th scope="row">{ &b.name }</th> } else { <td></td> }
             <td>{ blades }</td>
             <td>{ of(Quantity::Speed, b.airspeed_m_s) }</td>
             <td>{ of(Quantity::Rpm, b.rpm) }</td>

@@ -28,7 +28,7 @@ pub(super) fn FactorBars(props: &FactorBarsProps) -> Html {
             <table class="sheet-table factors">
                 <thead><tr>
                     <th scope="col">{ "The job’s figure times" }</th><th scope="col">{ "Found" }</th><th scope="col">{ "±" }</th>
-                    <th scope="col">{ "± before" }</th><th scope="col">{ "Thin: before, thick: with the readings" }</th><th scope="col">{ "" }</th>
+                    <th scope="col">{ "± before" }</th><th scope="col">{ "Thin: before, thick: with the readings" }</th><th scope="col">{ "Remark" }</th>
                 </tr></thead>
                 <tbody>{ for found.iter().map(|f| row(f, most)) }</tbody>
             </table>
