@@ -35,8 +35,7 @@ was found when this was written; a test fails where three times as much comes ou
 ";
 const CLOSED_FORMS: &str = "
 What stands beside the code that it tests is not listed: closed forms of single steps (wedges and masses of carved blades, least squares of
-the logbook, offsets of bent beams), and published formulas that the code follows step by step (Buhl, Glauert, Korn and Lock, Snel, the
-closures of the boundary layer, ordinates of section families), whose source is named in the test.
+the logbook, offsets of bent beams), and the closures of the boundary layer, whose source is named in the test.
 ";
 
 /// What another program judges, in one test.
