@@ -14,12 +14,12 @@ use spokeshave::drawn::DrawnStation;
 use spokeshave::result::PointResult;
 use yew::prelude::*;
 
-use crate::app::{Compared, RigRef};
+use crate::act::{Seen, use_act};
+use crate::form::Pick;
 use crate::number::fixed;
+use crate::results::{Compared, RigRef};
 use crate::state::{Action, Measure};
 use crate::units::{Quantity, Units};
-use crate::view::form::Pick;
-use crate::view::{Seen, use_act};
 use curve::DragCurve;
 use frame::Spans;
 use lines::{Best, Line, best_angles, chord, thickness, twist};

@@ -8,11 +8,11 @@ use web_sys::Element;
 use yew::prelude::*;
 
 use super::pull::{Pull, pressed};
+use crate::act::{Act, use_act};
 use crate::chart::axis::px;
+use crate::form::capital;
 use crate::number::plain;
 use crate::state::{Action, Held, Measure};
-use crate::view::form::capital;
-use crate::view::{Act, use_act};
 
 /// What the rings of one curve have in common.
 #[derive(Clone, Debug)]

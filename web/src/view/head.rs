@@ -6,11 +6,11 @@ use web_sys::HtmlInputElement;
 use yew::prelude::*;
 
 use super::drop::Drop;
-use super::form::{Entry, Message, Shown};
 use super::mark::{bend, halves, mark};
 use super::units::UnitPicks;
-use super::{Act, Seen, use_act};
+use crate::act::{Act, Seen, use_act};
 use crate::effect::file;
+use crate::form::{Entry, Message, Shown};
 use crate::saved_page;
 use crate::state::{Action, Draft, Field, Notice, Theme};
 use crate::units::LengthUnit;
@@ -126,7 +126,7 @@ fn Jobs() -> Html {
     let examples = DEMOS.iter().enumerate().map(|(i, demo)| {
         html! {
             <button type="button" class="row" onclick={act.on(move |_: MouseEvent| Action::Demo(i))}>
-                { super::form::capital(demo.about) }
+                { crate::form::capital(demo.about) }
             </button>
         }
     });

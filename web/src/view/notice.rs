@@ -2,7 +2,7 @@
 
 use yew::prelude::*;
 
-use super::use_act;
+use crate::act::use_act;
 use crate::state::{Action, Notice};
 
 /// Properties of [`Said`].

@@ -8,6 +8,7 @@ use yew::prelude::*;
 use super::bench::{self, BenchPanel};
 use super::blade::{BladeSettings, StationTable, in_a_line};
 use super::carved::{self, CarvedPanel};
+use super::caution;
 use super::coefficients::{self, Coefficients};
 use super::fit::{self, FitPanel};
 use super::head::Head;
@@ -27,11 +28,11 @@ use super::shape::{self, ShapePanel};
 use super::steps::Steps;
 use super::verdict::{Against, Verdict};
 use super::workshop::{self, Workshop};
-use super::{Seen, caution, use_act};
-use crate::app::{Later, Now};
+use crate::act::{Seen, use_act};
 use crate::chart::hatch::Hatches;
 use crate::editor::Curves;
 use crate::number::{NO_FIGURE, fixed};
+use crate::results::{Later, Now};
 use crate::state::{Action, Part, State};
 
 /// Properties of [`Page`].

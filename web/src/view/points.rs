@@ -6,8 +6,9 @@ use spokeshave::job::{Aircraft, FlightPoint};
 use spokeshave::result::{PointResult, State as Answer};
 use yew::prelude::*;
 
-use super::form::{Entry, Message, Pick, Shown};
-use super::{Seen, caution, use_act};
+use super::caution;
+use crate::act::{Seen, use_act};
+use crate::form::{Entry, Message, Pick, Shown};
 use crate::number::{figure, fixed_or_none};
 use crate::state::{Action, Choice, Field, PointFigure, Running, SettingKind};
 use crate::units::{Quantity, Units};

@@ -11,16 +11,16 @@ use spokeshave::section::library;
 use yew::prelude::*;
 
 use super::chips::{Chips, air_words, sentence};
-use super::form::Pick;
 use super::page::PageProps;
 use super::room::{Room, use_room};
 use super::verdict::Brief;
-use super::{Act, Seen, use_act};
-use crate::app::{Compared, Later};
+use crate::act::{Act, Seen, use_act};
 use crate::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Ghost, Planform, RadiusAxis, StationCard,
 };
+use crate::form::Pick;
 use crate::number::with_unit;
+use crate::results::{Compared, Later};
 use crate::state::{Action, State};
 use crate::units::Quantity;
 

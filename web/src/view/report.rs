@@ -7,12 +7,12 @@ use spokeshave::bench::{Paper, Sheet, pdf};
 use spokeshave::dossier::{Scale, Scales, dossier};
 use yew::prelude::*;
 
-use super::use_act;
 use super::workshop::files::not_taken;
 use super::workshop::sheets::Sheets;
 use super::workshop::{on_paper, paper_pick};
-use crate::app::RigRef;
+use crate::act::use_act;
 use crate::effect::file;
+use crate::results::RigRef;
 use crate::state::Action;
 use crate::units::{Quantity, Units};
 

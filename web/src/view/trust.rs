@@ -29,7 +29,7 @@ pub(super) fn trust() -> Html {
     let misses = rows.iter().filter_map(|row| match row[..] {
         [what, reason] => {
             let figures = what.split("; ").map(|figure| html! { <b>{ minus(figure) }</b> });
-            Some(html! { <li>{ for figures }{ minus(&crate::view::form::capital(reason)) }{ "." }</li> })
+            Some(html! { <li>{ for figures }{ minus(&crate::form::capital(reason)) }{ "." }</li> })
         }
         _ => None,
     });

@@ -3,9 +3,9 @@
 use spokeshave::wood::SPECIES;
 use yew::prelude::*;
 
+use crate::act::{Seen, use_act};
+use crate::form::{Labelled, Pick, Shown, Switch, capital};
 use crate::state::{Action, Choice, Field, Running, WoodChoice, WoodFigure, species_of, wood_of};
-use crate::view::form::{Labelled, Pick, Shown, Switch, capital};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`WoodForm`].
 #[derive(Properties, PartialEq)]

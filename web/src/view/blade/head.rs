@@ -3,8 +3,8 @@
 use yew::prelude::*;
 
 use super::table::Columns;
+use crate::act::Seen;
 use crate::units::Quantity;
-use crate::view::Seen;
 
 /// Properties of [`TableHead`].
 #[derive(Properties, PartialEq)]

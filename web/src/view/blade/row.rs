@@ -8,11 +8,11 @@ use yew::prelude::*;
 use super::head::point_class;
 use super::section_options;
 use super::table::Columns;
+use crate::act::{Seen, use_act};
 use crate::chart::departure::style;
+use crate::form::{Entry, Message, Pick, Shown};
 use crate::number::signed_or_none;
 use crate::state::{Action, Choice, Field, Measure, Running};
-use crate::view::form::{Entry, Message, Pick, Shown};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`StationRow`].
 #[derive(Properties, PartialEq)]

@@ -4,9 +4,9 @@ use spokeshave::job::{AngleReference, PitchControl, Rotation};
 use yew::prelude::*;
 
 use super::{one_section, section_options};
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Labelled, Pick, Shown};
 use crate::state::{Action, Choice, ControlKind, Field, Running};
-use crate::view::form::{Labelled, Pick, Shown};
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`BladeSettings`].
 #[derive(Properties, PartialEq)]

@@ -10,12 +10,12 @@ use yew::prelude::*;
 use super::head::TableHead;
 use super::one_section;
 use super::row::StationRow;
-use crate::app::Compared;
+use crate::act::{Seen, use_act};
 use crate::number::{figure, fixed, signed_or_none};
+use crate::results::Compared;
 use crate::state::choice::FEWEST_STATIONS;
 use crate::state::{Action, Choice, Running};
 use crate::units::Quantity;
-use crate::view::{Seen, use_act};
 
 /// Most flight points that get a column.
 const MOST_COLUMNS: usize = 4;

@@ -5,11 +5,12 @@ use spokeshave::result::Doubt;
 use yew::prelude::*;
 
 use super::choose;
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Entry, Message, Shown};
 use crate::number::{figure, fixed, with_unit};
 use crate::state::{BladeFigure, CarvedChoice, Field, State, between_stations};
 use crate::units::Quantity;
-use crate::view::form::{Entry, Message, Shown};
-use crate::view::{Act, Seen, onward, use_act};
+use crate::view::onward;
 
 /// Properties of [`BladeEntry`].
 #[derive(Properties, PartialEq)]

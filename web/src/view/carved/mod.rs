@@ -11,11 +11,11 @@ use spokeshave::job::AngleReference;
 use spokeshave::result::Doubt;
 use yew::prelude::*;
 
-use super::form::Pick;
-use super::{Act, Seen, use_act};
-use crate::app::RigRef;
+use crate::act::{Act, Seen, use_act};
+use crate::form::Pick;
 use crate::number::fixed;
 use crate::results::CarvedFound;
+use crate::results::RigRef;
 use crate::state::{Action, CarvedChoice, Choice, Running, State};
 use entry::BladeEntry;
 use found::{Balance, Differences, Holds, Points};

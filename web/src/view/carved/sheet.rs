@@ -6,9 +6,9 @@ use spokeshave::sheet::MOST_BYTES;
 use yew::prelude::*;
 
 use super::choose;
+use crate::act::{Seen, use_act};
 use crate::state::{CarvedChoice, State};
 use crate::view::pasted::Pasted;
-use crate::view::{Seen, use_act};
 
 const HINT: &str =
     "blade,radius_mm,face angle,chord_mm,thickness_mm\n1,300,31 15,93.5,20.4\n1,540,18.6,76,11.2";

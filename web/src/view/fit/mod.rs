@@ -10,8 +10,9 @@ use std::rc::Rc;
 use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use yew::prelude::*;
 
+use super::caution;
 use super::chips::air_words;
-use super::{Seen, caution};
+use crate::act::Seen;
 use crate::number::with_unit;
 use crate::state::State;
 use crate::units::Quantity;

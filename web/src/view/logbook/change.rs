@@ -9,12 +9,12 @@ use spokeshave::rig::Rig;
 use yew::prelude::*;
 
 use super::lines::points;
-use crate::app::RigRef;
+use crate::act::Seen;
+use crate::form::Pick;
 use crate::number::{read, signed, with_unit};
+use crate::results::RigRef;
 use crate::units::{Quantity, Units};
-use crate::view::Seen;
 use crate::view::carved::take_off;
-use crate::view::form::Pick;
 use crate::view::sections::boxes::Line;
 
 /// Properties of [`ChangeForm`].

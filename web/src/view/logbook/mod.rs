@@ -12,10 +12,11 @@ use spokeshave::job::Engine;
 use spokeshave::result::Logged;
 use yew::prelude::*;
 
-use super::form::Switch;
-use super::{Act, Seen, caution, use_act};
-use crate::app::RigRef;
+use super::caution;
+use crate::act::{Act, Seen, use_act};
+use crate::form::Switch;
 use crate::number::fixed;
+use crate::results::RigRef;
 use crate::state::{Action, Choice, LogbookChoice, Running, State};
 use change::ChangeForm;
 use factors::FactorBars;

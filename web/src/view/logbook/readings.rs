@@ -4,9 +4,10 @@ use web_sys::Element;
 use yew::prelude::*;
 
 use super::{choose, is_electric};
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Entry, Message, Shown, Switch};
 use crate::state::{Field, LogFigure, LogbookChoice};
-use crate::view::form::{Entry, Message, Shown, Switch};
-use crate::view::{Act, Seen, onward, use_act};
+use crate::view::onward;
 
 /// What is asked of a reading: what the engine draws is fuel or current, and the other only where it was read
 /// all the same.

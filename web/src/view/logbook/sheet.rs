@@ -6,9 +6,9 @@ use spokeshave::sheet::MOST_BYTES;
 use yew::prelude::*;
 
 use super::choose;
+use crate::act::{Seen, use_act};
 use crate::state::LogbookChoice;
 use crate::view::pasted::Pasted;
-use crate::view::{Seen, use_act};
 
 const HINT: &str =
     "rpm,throttle,airspeed_km_h,altitude_m,temperature_c,level\n2990,full,0,120,18,\n2520,,170,600,12,yes";

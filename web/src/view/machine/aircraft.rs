@@ -9,13 +9,13 @@ use yew::prelude::*;
 use super::asked::AskedCharts;
 use super::picks::kinds;
 use super::{hinted, labelled, optional, still_invented};
+use crate::act::{Act, Seen, use_act};
 use crate::number::{figure, fixed, with_unit};
 use crate::state::{
     AircraftChoice, AircraftFigure, AircraftKind, Choice, DragBy, Field, State, aircraft_untouched,
 };
 use crate::units::{Quantity, Units};
 use crate::view::chips::air_words;
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`AircraftPanel`].
 #[derive(Properties, PartialEq)]

@@ -10,13 +10,13 @@ use super::offered::OfferedChart;
 use super::picks::kinds;
 use super::rows::{Rows, RowsOf};
 use super::{labelled, optional, still_invented};
+use crate::act::{Act, Seen, use_act};
 use crate::number::{fixed, with_unit};
 use crate::results::Offered;
 use crate::state::{
     AltitudeKind, Choice, EngineChoice, EngineFigure, EngineKind, Field, FuelBy, State, engine_untouched,
 };
 use crate::units::{Quantity, Units};
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`EnginePanel`].
 #[derive(Properties, PartialEq)]

@@ -3,10 +3,10 @@
 use spokeshave::job::{Engine, Piston};
 use yew::prelude::*;
 
+use crate::act::{Seen, use_act};
+use crate::form::{Entry, Message, Shown};
 use crate::state::{Action, Choice, EngineChoice, EngineFigure, Field, Running};
 use crate::units::Quantity;
-use crate::view::form::{Entry, Message, Shown};
-use crate::view::{Seen, use_act};
 
 /// A table of the engine.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]

@@ -5,7 +5,7 @@ use spokeshave::section::import::{MOST_BYTES, read};
 use yew::prelude::*;
 
 use super::boxes::{Line, Opener, Sheet};
-use crate::view::{Seen, use_act};
+use crate::act::{Seen, use_act};
 
 /// Properties of [`Import`].
 #[derive(Properties, PartialEq)]

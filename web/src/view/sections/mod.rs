@@ -17,8 +17,8 @@ use spokeshave::result::PointResult;
 use spokeshave::section::library;
 use yew::prelude::*;
 
-use super::{Act, Seen};
-use crate::app::RigRef;
+use crate::act::{Act, Seen};
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Running, State};
 use import::Import;
 use maker::Maker;

@@ -7,11 +7,11 @@ use spokeshave::section::{Family, section_curves};
 use yew::prelude::*;
 
 use super::charts::Charts;
-use crate::app::RigRef;
+use crate::act::{Seen, use_act};
+use crate::form::Pick;
 use crate::number::fixed;
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Running, State};
-use crate::view::form::Pick;
-use crate::view::{Seen, use_act};
 
 /// Properties of [`Used`].
 #[derive(Properties, PartialEq)]

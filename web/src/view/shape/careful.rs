@@ -7,14 +7,14 @@ use spokeshave::job::{Figure, Job};
 use yew::prelude::*;
 
 use super::figures::{name, told, unit};
+use crate::act::Seen;
 use crate::background::shape::{Cost, DRAG_PERCENT, LIFT_PERCENT, Task};
 use crate::chart::line::{Axis, LineChart, Series, Stroke, Upright};
 use crate::chart::unit::Unit;
+use crate::form::Pick;
 use crate::number::significant;
 use crate::state::State;
 use crate::units::Quantity;
-use crate::view::Seen;
-use crate::view::form::Pick;
 
 /// Properties of [`Careful`].
 #[derive(Properties, PartialEq)]

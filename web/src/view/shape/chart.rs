@@ -8,17 +8,17 @@ use yew::prelude::*;
 
 use super::figures::{ALL, name, told, unit};
 use super::lines::{Layers, Place};
-use crate::app::RigRef;
+use crate::act::{Seen, use_act};
 use crate::background::shape::{Chart, Task};
 use crate::chart::axis::{bottom, left, most_on, placed, px, rows};
 use crate::chart::figure::{Figure as Framed, Table};
 use crate::chart::pointer::place;
 use crate::chart::width::use_width;
+use crate::form::{Pick, capital};
 use crate::number::with_unit;
+use crate::results::RigRef;
 use crate::state::{Action, Beside, Variant};
 use crate::units::{Quantity, Units};
-use crate::view::form::{Pick, capital};
-use crate::view::{Seen, use_act};
 
 /// Steps of the chart each way.
 const STEPS: usize = 40;

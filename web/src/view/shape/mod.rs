@@ -12,10 +12,11 @@ use spokeshave::job::FlightPoint;
 use spokeshave::shape::Wish;
 use yew::prelude::*;
 
-use super::{Seen, caution};
-use crate::app::RigRef;
+use super::caution;
+use crate::act::Seen;
 use crate::background::shape::Task;
 use crate::number::signed;
+use crate::results::RigRef;
 use crate::state::State;
 use careful::Careful;
 use chart::PitchDiameter;

@@ -9,11 +9,11 @@ use spokeshave::wood::least_margin;
 use yew::prelude::*;
 
 use super::figures::{better, name, told};
-use crate::app::{RigRef, Same};
+use crate::act::{Seen, use_act};
 use crate::number::{NO_FIGURE, signed, with_unit};
+use crate::results::{RigRef, Same};
 use crate::state::{Action, Beside, Variant};
 use crate::units::{Quantity, Units};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`Blades`].
 #[derive(Properties, PartialEq)]

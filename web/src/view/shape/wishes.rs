@@ -5,11 +5,11 @@ use spokeshave::shape::Wish;
 use yew::prelude::*;
 
 use super::figures::{ALL, name};
-use crate::app::RigRef;
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Labelled, Pick, Shown, Switch, capital};
 use crate::number::fixed;
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Field, LimitFigure, RpmBound, Running};
-use crate::view::form::{Labelled, Pick, Shown, Switch, capital};
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`WishBoxes`].
 #[derive(Properties, PartialEq)]

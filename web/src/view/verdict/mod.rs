@@ -13,8 +13,8 @@ pub use cells::{Against, inside_band};
 use findings::Findings;
 pub use gauge::Gauge;
 
-use crate::app::Compared;
 use crate::number::NO_FIGURE;
+use crate::results::Compared;
 use crate::units::Units;
 
 /// A figure that decides.

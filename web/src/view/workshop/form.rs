@@ -3,10 +3,10 @@
 use spokeshave::job::Flange;
 use yew::prelude::*;
 
+use crate::act::{Seen, use_act};
+use crate::form::Pick;
 use crate::state::{Action, Choice, Field, MakingFigure, Running, State};
-use crate::view::form::Pick;
 use crate::view::machine::hinted;
-use crate::view::{Seen, use_act};
 
 /// Properties of [`MakingForm`].
 #[derive(Properties, PartialEq)]

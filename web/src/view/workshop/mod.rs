@@ -13,8 +13,9 @@ use std::rc::Rc;
 use spokeshave::bench::{Bench, BenchError, Paper, Unit};
 use yew::prelude::*;
 
-use super::{Seen, caution, panel::Panel};
-use crate::app::RigRef;
+use super::{caution, panel::Panel};
+use crate::act::Seen;
+use crate::results::RigRef;
 use crate::units::LengthUnit;
 use files::Files;
 use form::MakingForm;

@@ -6,9 +6,9 @@ use spokeshave::bench::{Paper, Sheet, svg};
 use yew::prelude::*;
 
 use super::print::Print;
+use crate::act::use_act;
 use crate::effect::file;
 use crate::state::Action;
-use crate::view::use_act;
 
 #[derive(Properties, PartialEq)]
 pub(in crate::view) struct SheetsProps {

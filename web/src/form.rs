@@ -4,7 +4,7 @@ use spokeshave::drawn::DrawnStation;
 use web_sys::{HtmlInputElement, HtmlSelectElement};
 use yew::prelude::*;
 
-use super::use_act;
+use crate::act::use_act;
 use crate::state::{Action, Field, State, shown_text};
 
 /// What a box shows.
