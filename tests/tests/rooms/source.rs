@@ -88,8 +88,9 @@ fn in_name(c: char) -> bool {
 #[test]
 fn paths_from_the_root_are_found() {
     let code = "use crate::air::{Air, AirError};\nuse crate::{\n    fit::{self, line},\n\
-        \u{20}   report, rig as made,\n};\nfn f() -> crate::wood::Sheet { $crate::job::check(); a_crate::no::one() }\n\
-        pub(in crate::view) fn g() {}\nuse self::own::Thing;\n";
+                \u{20}   report, rig as made,\n};\n\
+                fn f() -> crate::wood::Sheet { $crate::job::check(); a_crate::no::one() }\n\
+                pub(in crate::view) fn g() {}\nuse self::own::Thing;\n";
     let names = |code: &str, depth| used(code, depth).into_iter().collect::<Vec<_>>().join(" ");
     assert_eq!(names(code, 1), "air fit job report rig view wood");
     let above = "use super::blade::Blade;\nuse super::{engine, shape::{self, twist}};\n";
