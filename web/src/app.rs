@@ -39,7 +39,11 @@ fn started() -> Store {
     if keep::torn() && state.notice.is_none() {
         state.notice = Some(Notice {
             title: "What this browser kept last of the job was cut off.".into(),
-            lines: vec!["This is what was kept before it, or an example where there was nothing. Files are as you saved them.".into()],
+            lines: vec![
+                "This is what was kept before it, or an example where there was nothing. Files are as you \
+                 saved them."
+                    .into(),
+            ],
         });
     }
     Store(Remembered::read().applied(state))

@@ -36,9 +36,10 @@ pub fn MethodPanel(props: &MethodPanelProps) -> Html {
             <div>
                 <h3>{ "Method" }</h3>
                 <p class="note">
-                    { "Blade-element momentum with losses at tip and hub, solved for every element by bracketing. \
-                       It leaves out yawed flow, blade sweep, bending and twist under load, and how one blade's wake meets \
-                       the fuselage. Air is the ISO standard atmosphere with an offset." }
+                    { "Blade-element momentum with losses at tip and hub, solved for every element by \
+                       bracketing. It leaves out yawed flow, blade sweep, bending and twist under load, and \
+                       how one blade's wake meets the fuselage. Air is the ISO standard atmosphere with an \
+                       offset." }
                 </p>
                 <Switches state={props.state.clone()} />
             </div>
@@ -142,7 +143,11 @@ fn Outside(props: &OutsideProps) -> Html {
             none if none.is_empty() => " – between stations".into(),
             some => format!(" – at station {some}"),
         };
-        html! { <li class={(note == Note::NoBalance).then_some("bad")}>{ format!("{}{place}", crate::form::capital(note.words())) }</li> }
+        html! {
+            <li class={(note == Note::NoBalance).then_some("bad")}>
+                { format!("{}{place}", crate::form::capital(note.words())) }
+            </li>
+        }
     });
     html! {
         <>

@@ -23,7 +23,9 @@ pub fn Said(props: &SaidProps) -> Html {
                 <b>{ &props.notice.title }</b>
                 <ul>{ for lines }</ul>
             </div>
-            <button type="button" class="plain-button" onclick={act.on(|_: MouseEvent| Action::Dismiss)}>{ "Close" }</button>
+            <button type="button" class="plain-button" onclick={act.on(|_: MouseEvent| Action::Dismiss)}>
+                { "Close" }
+            </button>
         </section>
     }
 }

@@ -57,7 +57,8 @@ pub fn StationRow(props: &StationRowProps) -> Html {
                 </th>
                 <BoxCells boxes={boxes.clone()} />
                 if columns.sections { <td><SectionPick index={i} state={state.clone()} /></td> }
-                <DepartureCells points={columns.points.clone()} departures={props.departures.clone()} point={state.point} now={props.now} />
+                <DepartureCells points={columns.points.clone()} departures={props.departures.clone()}
+                    point={state.point} now={props.now} />
                 if columns.beside.is_some() { <td class="beside">{ props.beside.clone() }</td> }
             </tr>
             if !wrong.is_empty() { <tr class="messages"><td colspan="16">{ messages }</td></tr> }

@@ -32,7 +32,8 @@ pub fn BladeSettings(props: &BladeSettingsProps) -> Html {
             { reference(&act, state) }
             { section(&act, state) }
             { control(&act, state) }
-            <Labelled shown={Shown::of(state, &[], Field::Blockage)} label="Air slowed by the body behind" hint="not" />
+            <Labelled shown={Shown::of(state, &[], Field::Blockage)} label="Air slowed by the body behind"
+                hint="not" />
             { for control_fields(state).iter().map(|&(field, label)| labelled(field, label)) }
         </div>
     }

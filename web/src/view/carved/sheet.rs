@@ -41,8 +41,9 @@ pub(super) fn ReadingsSheet(props: &ReadingsSheetProps) -> Html {
         <details class="import unprinted">
             <summary>{ "Bring in a sheet of readings, or start over" }</summary>
             <p class="note">
-                { "A line of headings with units, then a row for each place: blade, radius_mm or station, face angle or chord-line angle, \
-                   chord_mm, thickness_mm, track_mm. It takes the place of the readings above." }
+                { "A line of headings with units, then a row for each place: blade, radius_mm or station, \
+                   face angle or chord-line angle, chord_mm, thickness_mm, track_mm. It takes the place of \
+                   the readings above." }
             </p>
             <Pasted id="carved-sheet" label="Readings" hint={HINT} most_bytes={MOST_BYTES} {take} />
             <p class="buttons">

@@ -71,8 +71,9 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
     html! {
         <>
             <p class="note">
-                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is 100 or full. Tick level for flight that neither climbs nor sinks. \
-                   Pressure altitude and true airspeed, please; leave empty what was not read." }
+                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is \
+                   100 or full. Tick level for flight that neither climbs nor sinks. Pressure altitude and \
+                   true airspeed, please; leave empty what was not read." }
             </p>
             if count > 0 {
                 <div class="scroll" tabindex="0" role="region" aria-label="Readings"

@@ -39,8 +39,9 @@ pub(super) fn LogSheet(props: &LogSheetProps) -> Html {
         <details class="import unprinted">
             <summary>{ "Bring in a sheet of flights" }</summary>
             <p class="note">
-                { "A line of headings with units, then a row for each reading: rpm, throttle (full, a share or [%]), airspeed_km_h, altitude_m or \
-                   pressure_hpa, temperature_c, level (yes), fuel_kg_h, current_a, note. It takes the place of the readings above." }
+                { "A line of headings with units, then a row for each reading: rpm, throttle (full, a share \
+                   or [%]), airspeed_km_h, altitude_m or pressure_hpa, temperature_c, level (yes), \
+                   fuel_kg_h, current_a, note. It takes the place of the readings above." }
             </p>
             <Pasted id="log-sheet" label="Flights" hint={HINT} most_bytes={MOST_BYTES} {take} />
         </details>

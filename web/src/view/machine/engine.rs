@@ -116,9 +116,14 @@ fn piston(act: &Act, state: &Seen, p: &Piston) -> Html {
             { kinds(act, "Power between rows", &BETWEEN, between, p.interpolation, |to| {
                 Choice::Engine(EngineChoice::Interpolation(to))
             }) }
-            { kinds(act, "Power at height", &AltitudeKind::ALL, AltitudeKind::words, AltitudeKind::of(&p.altitude_law), |to| {
-                Choice::Engine(EngineChoice::Altitude(to))
-            }) }
+            { kinds(
+                act,
+                "Power at height",
+                &AltitudeKind::ALL,
+                AltitudeKind::words,
+                AltitudeKind::of(&p.altitude_law),
+                |to| Choice::Engine(EngineChoice::Altitude(to)),
+            ) }
             if let AltitudeLaw::HeldTo(_) = p.altitude_law { { box_of(EngineFigure::HeldTo) } }
             { kinds(act, "Fuel consumption by", &FuelBy::ALL, FuelBy::words, FuelBy::of(p), |way| {
                 Choice::Engine(EngineChoice::FuelBy(way))

@@ -135,7 +135,10 @@ fn TableRow(props: &TableRowProps) -> Html {
                 <th scope="row">{ i + 1 }</th>
                 { for boxes.iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
                 <td>
-                    <button type="button" class="icon" aria-label={named("add a row after")} onclick={choose(of.add(i))}>{ "+" }</button>
+                    <button type="button" class="icon" aria-label={named("add a row after")}
+                        onclick={choose(of.add(i))}>
+                        { "+" }
+                    </button>
                     <button type="button" class="icon" aria-label={named("remove")} disabled={props.few}
                         onclick={choose(of.remove(i))}>{ "×" }</button>
                 </td>

@@ -220,10 +220,12 @@ fn Source(props: &SourceProps) -> Html {
     };
     html! {
         <div>
-            <Sheet id="make-outline" label="Outline: x y on each line, round the section from the trailing edge" hint={HINT}
+            <Sheet id="make-outline"
+                label="Outline: x y on each line, round the section from the trailing edge" hint={HINT}
                 text={props.form.outline.clone()} message={props.message.clone()} on={Callback::from(with)} />
             <div class="buttons">
-                <Opener label="Open an outline" accept=".dat,.txt,.csv,text/plain" most_bytes={MAX_BYTES} on={on_open} />
+                <Opener label="Open an outline" accept=".dat,.txt,.csv,text/plain" most_bytes={MAX_BYTES}
+                    on={on_open} />
                 <Pick label="Outline of a section" {options} picked={Some(0)} {onpick} bare=true />
             </div>
         </div>

@@ -121,9 +121,16 @@ fn Tables(props: &TablesProps) -> Html {
     html! {
         <>
             if !ratios.is_empty() {
-                <Pick label="Tables for" {options} picked={Some(index)} onpick={Callback::from(move |i| picked.set(Some(i)))} />
+                <Pick label="Tables for" {options} picked={Some(index)}
+                    onpick={Callback::from(move |i| picked.set(Some(i)))} />
             }
-            <p class="note">{ if family.about.origin.is_empty() { "The job does not say where the tables come from." } else { &family.about.origin } }</p>
+            <p class="note">
+                { if family.about.origin.is_empty() {
+                    "The job does not say where the tables come from."
+                } else {
+                    &family.about.origin
+                } }
+            </p>
             if *own {
                 <p class="buttons">
                     <button type="button" class="act" onclick={everywhere}>{ "Use at every station" }</button>

@@ -70,7 +70,8 @@ pub fn ShapePanel(props: &ShapePanelProps) -> Html {
             <Blades state={state.clone()} rig={rig.clone()} />
             <PitchDiameter state={state.clone()} rig={rig.clone()} chart={work.drawn.chart.clone()} busy={work.busy()}
                 on_draw={drawing(&work, state, rig)} />
-            <Careful state={state.clone()} costs={work.drawn.costs.clone()} busy={work.busy()} on_draw={careful(&work, state)} />
+            <Careful state={state.clone()} costs={work.drawn.costs.clone()} busy={work.busy()}
+                on_draw={careful(&work, state)} />
             { caution::shape() }
         </div>
     }
@@ -92,8 +93,18 @@ fn ways(work: &Work, state: &Seen, rig: &RigRef, point: &FlightPoint) -> Html {
     html! {
         <div class="buttons ways unprinted">
             { button(format!("Best-incidence twist at {name}"), format!("twist, {name}"), Task::Twist(alone), false) }
-            { button("Best-incidence twist over all that counts".into(), "twist, all points".into(), Task::Twist(all), count < 2) }
-            { button(format!("Least induced loss at {name}"), format!("least loss, {name}"), Task::LeastLoss(here), point.airspeed_m_s == Some(0.0)) }
+            { button(
+                "Best-incidence twist over all that counts".into(),
+                "twist, all points".into(),
+                Task::Twist(all),
+                count < 2
+            ) }
+            { button(
+                format!("Least induced loss at {name}"),
+                format!("least loss, {name}"),
+                Task::LeastLoss(here),
+                point.airspeed_m_s == Some(0.0)
+            ) }
             { button("Search".into(), "search".into(), Task::Search, false) }
         </div>
     }
@@ -136,7 +147,9 @@ fn told(work: &Work) -> Html {
                 <div class="work-bar">
                     <progress aria-label={format!("Working out {name}")} />
                     <span>{ words }</span>
-                    <button type="button" class="act" onclick={move |_: MouseEvent| cancel.call_off()}>{ "Call it off" }</button>
+                    <button type="button" class="act" onclick={move |_: MouseEvent| cancel.call_off()}>
+                        { "Call it off" }
+                    </button>
                 </div>
             }
         }

@@ -96,7 +96,9 @@ pub fn Verdict(props: &VerdictProps) -> Html {
         <section aria-label={format!("Verdict at {}", result.name)}>
             <ul class="verdict">{ for cells }</ul>
             if let Some(beside) = &props.beside {
-                <p class="verdict-notes">{ format!("Grey: {}. ", beside.name) }<a href="#shape">{ "Compare another" }</a></p>
+                <p class="verdict-notes">
+                    { format!("Grey: {}. ", beside.name) }<a href="#shape">{ "Compare another" }</a>
+                </p>
             }
             <Findings margins={props.margins.clone()} units={props.units} />
             <Notes notes={result.notes.clone()} />
