@@ -114,7 +114,8 @@ fn task() -> Result<(Value, Job)> {
     let (whole, rpm) = logged(&carved)?;
     let told = logbook::estimate(&Rig::new(&whole)?)?;
     let task = json!({
-        "station": STATION, "drawn": figures(&drawn, STATION)?, "edits": edits, "twisted": figures(&twisted, STATION)?,
+        "station": STATION, "drawn": figures(&drawn, STATION)?, "edits": edits,
+        "twisted": figures(&twisted, STATION)?,
         "faces": faces, "from_drawn": differences.blades.iter().map(from_drawn).collect::<Vec<_>>(),
         "log_rpm": rpm, "factors": told.estimate.found.iter().map(|f| f.value).collect::<Vec<_>>(),
         "diameter_m": whole.propeller.diameter_m, "title": whole.title,
