@@ -98,7 +98,15 @@ async fn a_large_job_edited_again_and_again_does_not_grow_the_page() -> Result<(
             }
         }
         let [half, whole] = known[..] else { anyhow::bail!("two readings") };
-        println!("module and scripts, MB: {:.1} {:.1} after {} edits, {:.1} {:.1} after {edits}", half[0] / 1e6, half[1] / 1e6, edits / 2, whole[0] / 1e6, whole[1] / 1e6);
+        let [before, after] = [half, whole].map(|bytes| bytes.map(|b| b / 1e6));
+        println!(
+            "module and scripts, MB: {:.1} {:.1} after {} edits, {:.1} {:.1} after {edits}",
+            before[0],
+            before[1],
+            edits / 2,
+            after[0],
+            after[1]
+        );
         let allowed = SLACK_BYTES + STEP_BYTES * f64::from(edits - edits / 2);
         for (half, whole) in half.iter().zip(&whole) {
             ensure!(whole - half <= allowed, "{half} bytes grew to {whole}, {allowed} more are allowed");

@@ -127,7 +127,8 @@ fn task() -> Result<(Value, Job)> {
     let changes = changes(&known, &wanted)?;
     let margins = strength(&whole_rig)?.stations.into_iter().map(|s| s.margin.map(|m| 100.0 * m));
     let task = json!({
-        "station": STATION, "drawn": figures(&drawn, STATION)?, "edits": edits, "twisted": figures(&twisted, STATION)?,
+        "station": STATION, "drawn": figures(&drawn, STATION)?, "edits": edits,
+        "twisted": figures(&twisted, STATION)?,
         "faces": faces, "from_drawn": differences.blades.iter().map(from_drawn).collect::<Vec<_>>(),
         "log_rpm": rpm, "factors": told.estimate.found.iter().map(|f| f.value).collect::<Vec<_>>(),
         "wanted_rpm": wanted_rpm.to_string(),
