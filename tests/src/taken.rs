@@ -45,7 +45,7 @@ pub fn same_files(folder: &Path, job: &Job, point: usize) -> Result<()> {
     let report = pdf(&job.title, &report).len() as f64;
     let taken: Vec<(String, Vec<u8>)> = names(folder)?
         .into_iter()
-        .filter(|name| name.ends_with(".pdf"))
+        .filter(|name| Path::new(name).extension().is_some_and(|e| e == "pdf"))
         .map(|name| std::fs::read(folder.join(&name)).map(|bytes| (name, bytes)))
         .collect::<std::io::Result<_>>()?;
     ensure!(taken.len() == 2 && taken.iter().all(|t| t.1.starts_with(b"%PDF")), "sheets and report as PDF");
