@@ -92,9 +92,9 @@ pub(super) fn windmill_brake() -> Vec<Check> {
     let rig = example();
     let blade = &rig.rotor.blade;
     let mut checks = Vec::new();
-    for rotation_rad_s in [130.0, 180.0, 240.0] {
+    for rotation_rad_s in [180.0, 240.0, 300.0] {
         for share in [0.5, 0.6, 0.7, 0.8, 0.9] {
-            let at = Condition { air: sea_level(), airspeed_m_s: 25.0, rotation_rad_s, turn_rad: -0.4 };
+            let at = Condition { air: sea_level(), airspeed_m_s: 20.0, rotation_rad_s, turn_rad: -0.5 };
             let element = rig.rotor.element(&rig.rotor.ring(share * blade.radius_m), &at).0;
             let Some(b) = element.balance().filter(|b| b.windmill_brake) else { continue };
             let (cn, _) = b.normal_and_tangential();
