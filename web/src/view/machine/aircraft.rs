@@ -194,9 +194,9 @@ fn speed_table(state: &Seen, a: &Aeroplane, air: &Air) -> Html {
 fn words(name: &str) -> &str {
     match name {
         "stall" => "Stall",
-        "least power" => "Least power, longest aloft on fuel",
-        "least drag" => "Least drag, farthest on fuel",
-        "fast cruise" => "Fast cruise, farthest for fuel and time together",
+        "least power" => "Least power, longest aloft where above the stall",
+        "least drag" => "Least drag, farthest",
+        "fast cruise" => "Fast cruise, farthest for energy and time together",
         other => other,
     }
 }

@@ -4,7 +4,7 @@ use std::rc::Rc;
 
 use spokeshave::job::{Aim, Figure, Job};
 use spokeshave::rig::Rig;
-use spokeshave::shape::{Wish, figure_at};
+use spokeshave::shape::{Wish, brief, figure_at};
 use spokeshave::wood::least_margin;
 use yew::prelude::*;
 
@@ -27,20 +27,22 @@ struct Row {
     diameter_m: f64,
     pitch_m: f64,
     figures: Vec<Option<f64>>,
+    /// Whether each is that throttled back to the limit rpm.
+    held: Vec<bool>,
     /// Least margin of strength, where the job names its wood.
     margin: Option<f64>,
 }
 
 impl Row {
     fn of(rig: &Rig, aims: &[Aim]) -> Self {
-        let at = |aim: &Aim| {
-            let point = rig.job.flight_points.iter().find(|p| p.name == aim.flight_point)?;
-            figure_at(rig, point, aim.figure)
-        };
+        let point = |aim: &Aim| rig.job.flight_points.iter().find(|p| p.name == aim.flight_point);
+        let at = |aim: &Aim| figure_at(rig, point(aim)?, aim.figure);
+        let held = |aim: &Aim| point(aim).is_some_and(|p| brief(rig, p).held_at_limit);
         Self {
             diameter_m: rig.job.propeller.diameter_m,
             pitch_m: rig.rotor.blade.pitch_075_m(0.0),
             figures: aims.iter().map(at).collect(),
+            held: aims.iter().map(held).collect(),
             margin: rig
                 .job
                 .wood
@@ -100,6 +102,7 @@ fn figures(row: &Row, aims: &[Aim], drawn: Option<&[Option<f64>]>, units: Units)
         let gain = gain.filter(|_| aim.figure != Figure::Rpm);
         html! {
             <td>{ told(units, aim.figure, *value) }
+                if row.held[i] { <small>{ "throttled back to the limit rpm" }</small> }
                 if let Some(gain) = gain { <small class="gain">{ format!("{}\u{a0}%", signed(gain, 1)) }</small> }
             </td>
         }
