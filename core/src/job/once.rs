@@ -64,7 +64,9 @@ impl<'de> Visitor<'de> for Reader {
         let mut all = Map::new();
         while let Some(key) = map.next_key::<String>()? {
             if all.contains_key(&key) {
-                return Err(A::Error::custom(format_args!("the key \"{key}\" stands twice in one place; allowed is once")));
+                return Err(A::Error::custom(format_args!(
+                    "the key \"{key}\" stands twice in one place; allowed is once"
+                )));
             }
             let Once(value) = map.next_value()?;
             all.insert(key, value);
