@@ -61,6 +61,9 @@ const FASTEST_TIP_MACH: f64 = 1.2;
 const POWER_STEPS: u32 = 64;
 /// Slowest rotation considered over the fastest.
 const SLOWEST: f64 = 0.01;
+/// By what share an rpm may seem past a limit that it holds: more than what turning it into radians per second
+/// and back adds, less than anybody reads.
+const ROUNDED: f64 = 1e-9;
 
 /// The condition at which a flight point's setting is met.
 ///
@@ -122,7 +125,7 @@ pub fn spare(rig: &Rig, at: &Condition, taken_w: f64) -> Option<Spare> {
     let shaft = rig.shaft.as_ref()?;
     let (rpm, highest_rpm) = (rpm_of(at), highest_rpm(shaft));
     let here_w = || shaft.power_w(rpm, &at.air, 1.0).max(0.0);
-    let given_w = if rpm > highest_rpm { greatest_w(shaft, at, highest_rpm) } else { here_w() };
+    let given_w = if past_limit(shaft, rpm) { greatest_w(shaft, at, highest_rpm) } else { here_w() };
     let power_share = (given_w - taken_w) / taken_w.max(1e-9);
     Some(Spare { rpm_share: 1.0 - rpm / highest_rpm, power_share, highest_rpm, given_w })
 }
@@ -151,6 +154,11 @@ pub fn highest_rpm(shaft: &Shaft) -> f64 {
     shaft.limit_rpm().unwrap_or(f64::INFINITY).min(shaft.rpm_range().1)
 }
 
+/// Whether a propeller rpm is more than the engine allows.
+fn past_limit(shaft: &Shaft, rpm: f64) -> bool {
+    rpm > highest_rpm(shaft) * (1.0 + ROUNDED)
+}
+
 /// Meets the settings of a job, by all elements or, for a look, by few.
 #[derive(Clone, Copy)]
 struct Solver<'r> {
@@ -176,7 +184,7 @@ impl<'r> Solver<'r> {
         let spare =
             |loads: &Loads, c: &Condition| power_w(loads, c) - shaft.power_w(rpm_of(c), &at.air, throttle);
         let at = match self.demand(at, &spare).governed(trail) {
-            Some(Governed::Held(met)) if rpm_of(&met.condition) > highest_rpm(shaft) * (1.0 + 1e-9) => {
+            Some(Governed::Held(met)) if past_limit(shaft, rpm_of(&met.condition)) => {
                 return Err(State::OverLimitRpm);
             }
             Some(Governed::Held(met)) => return Ok(met),
@@ -189,10 +197,7 @@ impl<'r> Solver<'r> {
             Missed::AboveRange => State::OverLimitRpm,
             Missed::BelowRange => State::EngineCannotTurnIt,
         })?;
-        match shaft.limit_rpm() {
-            Some(limit) if rpm_of(&met.condition) > limit => Err(State::OverLimitRpm),
-            _ => Ok(met),
-        }
+        if past_limit(shaft, rpm_of(&met.condition)) { Err(State::OverLimitRpm) } else { Ok(met) }
     }
 
     /// The propeller takes a power.
@@ -237,7 +242,7 @@ impl<'r> Solver<'r> {
     fn within_engine(&self, met: &Met) -> Result<(), State> {
         let Some(shaft) = &self.rig.shaft else { return Ok(()) };
         let rpm = rpm_of(&met.condition);
-        if rpm > highest_rpm(shaft) {
+        if past_limit(shaft, rpm) {
             return Err(State::OverLimitRpm);
         }
         let taken = power_w(&met.loads, &met.condition);

@@ -9,6 +9,7 @@ mod bench;
 mod bench_faults;
 mod bench_solid;
 mod bench_take_off;
+mod by_scan;
 mod carved;
 mod carved_plan;
 mod carved_readings;

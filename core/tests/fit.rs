@@ -2,10 +2,10 @@
 
 use spokeshave::air::Air;
 use spokeshave::aircraft::drag_n;
-use spokeshave::fit::spare;
+use spokeshave::fit::{highest_rpm, offer, slower_than_stall, spare};
 use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, PowerPoint, Setting};
 use spokeshave::result::{Limit, Note, PointResult, State};
-use spokeshave::rig::{Rig, air_of};
+use spokeshave::rig::{Rig, air_of, rotation_rad_s};
 use spokeshave::rotor::Condition;
 use spokeshave::shape::{brief, kept};
 
@@ -208,4 +208,112 @@ fn a_limit_is_broken_exactly_where_its_figures_say_so() {
         (here.power_share - (given / 30_000.0 - 1.0)).abs() < 1e-12 && (here.given_w - given).abs() < 1e-9
     );
     assert!((here.rpm_share - (1.0 - 2600.0 / 3350.0)).abs() < 1e-12, "{here:?}");
+}
+
+/// Past the limit only full throttle is drawn back; what is asked otherwise has no figure held at the limit.
+#[test]
+fn only_full_throttle_is_told_held_at_the_limit_rpm() {
+    let mut fine = demo(0);
+    fine.propeller.stations.iter_mut().for_each(|s| s.angle_deg = s.angle_deg.map(|a| a - 8.0));
+    let held = at(&fine, Some(50.0), Setting::FullThrottle {}).held.unwrap();
+    // Held at the limit it is not past it: the engine gives it, and burns fuel for it.
+    let power = held.figures.power_w.unwrap();
+    near(held.meeting.fuel_kg_per_h, 0.31 * power / 1000.0, 1e-9);
+    let part = at(&fine, Some(50.0), Setting::Throttle { fraction: 0.95 });
+    assert_eq!((part.state, part.held.is_none()), (State::OverLimitRpm, true));
+    let level = at(&fine, Some(58.0), Setting::Level {});
+    assert_eq!((level.state, level.held.is_none()), (State::OverLimitRpm, true), "{level:?}");
+}
+
+/// Standing still is slower than the stall only where it is to be level.
+#[test]
+fn at_rest_an_aeroplane_is_slower_than_its_stall_only_where_it_is_to_be_level() {
+    let slow = |airspeed_m_s, setting| {
+        let point =
+            FlightPoint { name: "".into(), altitude_m: 0.0, isa_offset_k: 0.0, airspeed_m_s, setting };
+        slower_than_stall(&Rig::new(&demo(0)).unwrap(), &point, &air_of(&point).unwrap())
+    };
+    assert!(slow(Some(0.0), Setting::Level {}));
+    // The stall: sqrt(2 · 430 · 9.80665/(1.225 · 11.5 · 1.6)) = 19.34 m/s.
+    for (v, slower) in [(0.0, false), (0.1, true), (19.3, true), (19.4, false)] {
+        assert_eq!(slow(Some(v), Setting::FullThrottle {}), slower, "{v}");
+        assert_eq!(slow(Some(v), Setting::Rpm { rpm: 2500.0 }), slower, "{v}");
+    }
+}
+
+/// A twentieth more than the engine gives, or than it may turn, is as much beyond it as twice as much.
+#[test]
+fn a_little_beyond_the_engine_is_noted_too() {
+    let note = |rpm: f64, taken: f64| {
+        let rig = Rig::new(&demo(0)).unwrap();
+        let air = Air::standard(0.0, 0.0).unwrap();
+        let at = Condition { air, airspeed_m_s: 40.0, rotation_rad_s: rotation_rad_s(rpm), turn_rad: 0.0 };
+        let given = rig.shaft.as_ref().unwrap().power_w(rpm, &air, 1.0);
+        spokeshave::fit::beyond_engine(&rig, &at, taken * given)
+    };
+    assert_eq!(note(2800.0, 1.0), []);
+    assert_eq!(note(2800.0, 1.05), [Note::MoreThanEngine]);
+    assert_eq!(note(3300.0, 1.0), []);
+    assert_eq!(note(3300.0 * 1.05, 0.99), [Note::PastLimitRpm]);
+    assert_eq!(note(3300.0 * 1.05, 1.05), [Note::PastLimitRpm, Note::MoreThanEngine]);
+}
+
+/// At its limit an engine gives what it gives there, though it may give more at fewer rpm; a limit that is not
+/// quite itself in radians per second (3350 rpm is, 3250 comes out above) is no limit passed.
+#[test]
+fn at_the_limit_rpm_an_engine_gives_what_it_gives_there() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(engine)) = &mut job.engine else { panic!("a piston engine") };
+    engine.full_throttle.push(PowerPoint { rpm: 3400.0, power_w: 20_000.0 });
+    engine.full_throttle[4].power_w = 40_000.0;
+    let air = Air::standard(0.0, 0.0).unwrap();
+    for limit in [3250.0, 3350.0] {
+        let Some(Engine::Piston(engine)) = &mut job.engine else { panic!("a piston engine") };
+        engine.max_rpm = Some(limit);
+        let rig = Rig::new(&job).unwrap();
+        let at = Condition { air, airspeed_m_s: 40.0, rotation_rad_s: rotation_rad_s(limit), turn_rad: 0.0 };
+        let given = rig.shaft.as_ref().unwrap().power_w(limit, &air, 1.0);
+        assert!(given < 55_000.0, "less than at 3200 rpm");
+        let spared = spare(&rig, &at, 30_000.0).unwrap();
+        near(Some(spared.given_w), given, 1e-9);
+        near(Some(spared.power_share), given / 30_000.0 - 1.0, 1e-9);
+    }
+}
+
+/// Offer and demand over rpm of a geared engine at height, each by its own law.
+#[test]
+fn the_offer_is_the_engines_at_each_rpm_in_both_airs() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(engine)) = &mut job.engine else { panic!("a piston engine") };
+    engine.gear_ratio = 1.25;
+    job.flight_points = vec![FlightPoint {
+        name: "high".into(),
+        altitude_m: 2500.0,
+        isa_offset_k: 0.0,
+        airspeed_m_s: Some(35.0),
+        setting: Setting::FullThrottle {},
+    }];
+    let rig = Rig::new(&job).unwrap();
+    let found = offer(&rig, 0, 14);
+    assert_eq!(found.len(), 14);
+    let air = Air::standard(2500.0, 0.0).unwrap();
+    let sigma = air.density_ratio();
+    for (i, o) in found.iter().enumerate() {
+        // The curve is given from 2000 to 3300 rpm of the engine.
+        near(Some(o.engine_rpm), 2000.0 + 100.0 * i as f64, 1e-12);
+        near(Some(o.propeller_rpm), o.engine_rpm / 1.25, 1e-12);
+        // A. W. Gagg and E. V. Ferrar, 1934: σ − (1 − σ)/7.55; at sea level σ is 1.5e-8 above 1.
+        near(Some(o.offered_w), o.at_sea_level_w * (sigma - (1.0 - sigma) / 7.55), 1e-7);
+        let known = [(2000.0, 36_000.0), (2400.0, 45_000.0), (2800.0, 53_000.0), (3200.0, 58_000.0)];
+        let at_a_point = known.iter().find(|k| (o.engine_rpm - k.0).abs() < 1e-6);
+        at_a_point.into_iter().for_each(|k| near(Some(o.at_sea_level_w), k.1, 1e-7));
+        let rotation_rad_s = rotation_rad_s(o.propeller_rpm);
+        let at = Condition { air, airspeed_m_s: 35.0, rotation_rad_s, turn_rad: 0.0 };
+        // An element's balance is sought, so that the last digits of the rpm count: 2e-8 comes out.
+        near(Some(o.taken_w), rig.rotor.loads(&at).torque_n_m * rotation_rad_s, 1e-7);
+    }
+    // Two are the least that make a line: the ends.
+    let ends: Vec<f64> = offer(&rig, 0, 0).iter().map(|o| o.engine_rpm.round()).collect();
+    assert_eq!(ends, [2000.0, 3300.0]);
+    near(Some(highest_rpm(rig.shaft.as_ref().unwrap())), 3300.0 / 1.25, 1e-12);
 }

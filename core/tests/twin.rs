@@ -2,9 +2,9 @@
 //! together doubles.
 
 use serde_json::Value;
-use spokeshave::fit::{envelope, take_off};
+use spokeshave::fit::{ceilings, envelope, take_off, take_off_in};
 use spokeshave::job::{Aircraft, DEMOS, Engine, Job};
-use spokeshave::rig::Rig;
+use spokeshave::rig::{Rig, air_of};
 
 /// Figures of the whole aircraft.
 const TOGETHER: [&str; 8] = [
@@ -83,7 +83,8 @@ fn twins_meet_as_one_of_half_the_size_does() {
         let full = jobs[0].flight_points[0].clone();
         told(&jobs, "range", |rig| {
             let range = envelope(rig, &full, 24, &[0.75]).unwrap();
-            serde_json::json!([range, take_off(rig, &range)])
+            let quick = take_off_in(rig, &air_of(&full).unwrap());
+            serde_json::json!([range, take_off(rig, &range), quick, ceilings(rig, 0.0)])
         });
     }
 }

@@ -162,3 +162,6 @@ fn bracketed((a, b): Bracket, demand: &dyn Fn(f64) -> f64, eps: f64) -> f64 {
     let mut rule = roots::SimpleConvergency { eps, max_iter: 60 };
     roots::find_root_brent(a.0, b.0, ends, &mut rule).unwrap_or(b.0)
 }
+
+#[cfg(test)]
+mod tests;

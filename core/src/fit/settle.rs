@@ -36,7 +36,7 @@ pub(super) struct Met {
 }
 
 /// Change of the loads with the free quantity.
-#[derive(Clone, Copy, Debug)]
+#[derive(Clone, Copy, Debug, Default)]
 pub(super) struct Steepness {
     thrust_n: f64,
     torque_n_m: f64,
@@ -189,3 +189,6 @@ impl Demand<'_> {
         })
     }
 }
+
+#[cfg(test)]
+mod tests;

@@ -100,3 +100,6 @@ impl Trail {
         Some((root, Some(root.x - rough.x)))
     }
 }
+
+#[cfg(test)]
+mod tests;
