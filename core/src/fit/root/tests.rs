@@ -22,8 +22,9 @@ fn of_several_roots_at_which_it_rises_the_wanted_one_is_found() {
         assert!((root.x - expected).abs() < 3e-6, "{root:?}");
         assert!(above.unwrap().abs() < 1e-3, "both are the same demand: {above:?}");
         let slope = (expected - 4.1) * (expected - 7.9 + expected);
-        // That of the chord through the last two looks, 2e-3 apart: f''/2f' is 0.53 there.
-        assert!((root.slope / slope - 1.0).abs() < 2e-3, "{root:?} {slope}");
+        // It is a chord's, over the last step of the few elements but one, and only leads the next search: there a
+        // hundredth off leaves a hundredth of a step that is small. 1.1e-3 comes out.
+        assert!((root.slope / slope - 1.0).abs() < 1e-2, "{root:?} {slope}");
         let rough = search(&thrice, &never, wanted).rough_root().unwrap();
         assert!((rough.x - expected).abs() < 1e-3, "{rough:?}");
     }
