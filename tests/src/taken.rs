@@ -21,9 +21,9 @@ pub const FILES: [(&str, &str); 6] = [
 ];
 /// The button of all sheets of paper.
 pub const SHEETS: &str = "Sheets, PDF";
-/// How far corners of a solid may lie apart, mm: the last place of a single-precision number of a metre, and
-/// what another processor's elementary functions make of it.
-const CORNERS_MM: f32 = 2e-3;
+/// How far corners of a solid may lie apart, mm: three times the last place of a single-precision number of 500 to
+/// 1000 mm, 6e-5, for another processor's elementary functions; 4e-6 comes out.
+const CORNERS_MM: f32 = 2e-4;
 
 /// Whether a folder holds the files of a job, in millimetres on A4, as the core makes them.
 ///
