@@ -8,10 +8,10 @@ use spokeshave::job::{DEMOS, Job};
 use spokeshave::rig::Rig;
 
 fn paper(c: &mut Criterion) {
-    let Ok(job) = Job::from_json(DEMOS[0].json) else { return };
-    let Ok(rig) = Rig::new(&job) else { return };
+    let job = Job::from_json(DEMOS[0].json).expect("an example");
+    let rig = Rig::new(&job).expect("an example");
     c.bench_function("a blade made ready for the bench", |b| b.iter(|| Bench::new(black_box(&rig))));
-    let Ok(bench) = Bench::new(&rig) else { return };
+    let bench = Bench::new(&rig).expect("an example");
     c.bench_function("every sheet as SVG and PDF", |b| {
         b.iter(|| sheet_files(black_box(&bench), Paper::A4, Unit::Millimetre));
     });

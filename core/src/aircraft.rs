@@ -7,12 +7,10 @@ mod asked;
 
 pub use asked::{Asked, asked};
 
-use std::f64::consts::PI;
-
 use serde::Serialize;
 
 use crate::air::{Air, G0_M_S2};
-use crate::job::{Aeroplane, Aircraft, Drag};
+use crate::job::{Aeroplane, Aircraft};
 
 /// Speeds of an aeroplane at one air, true airspeed in m/s.
 #[derive(Clone, Copy, Debug, PartialEq, Serialize)]
@@ -64,7 +62,7 @@ pub fn thrust_asked_n(aircraft: &Aircraft, air: &Air, airspeed_m_s: f64) -> Opti
 pub fn drag_n(a: &Aeroplane, air: &Air, airspeed_m_s: f64) -> Option<f64> {
     let qs = 0.5 * air.density_kg_m3 * airspeed_m_s * airspeed_m_s * a.wing_area_m2;
     let w = a.mass_kg * G0_M_S2;
-    (qs > 0.0).then(|| qs * a.drag.cd0 + induced_factor(&a.drag) * w * w / qs)
+    (qs > 0.0).then(|| qs * a.drag.cd0 + a.drag.induced_factor() * w * w / qs)
 }
 
 /// The aircraft with its drag without lift multiplied.
@@ -77,20 +75,10 @@ pub fn with_drag(aircraft: &Aircraft, factor: f64) -> Aircraft {
     other
 }
 
-/// `k` as given, or `1/(π e AR)`.
-#[must_use]
-pub fn induced_factor(drag: &Drag) -> f64 {
-    match (drag.k, drag.aspect_ratio, drag.oswald) {
-        (Some(k), _, _) => k,
-        (None, Some(ar), Some(e)) => 1.0 / (PI * e * ar),
-        _ => 0.0,
-    }
-}
-
 /// The speeds of an aeroplane in an air.
 #[must_use]
 pub fn speeds(a: &Aeroplane, air: &Air) -> Speeds {
-    let (cd0, k) = (a.drag.cd0, induced_factor(&a.drag));
+    let (cd0, k) = (a.drag.cd0, a.drag.induced_factor());
     let speed_at = |cl: f64| (2.0 * a.mass_kg * G0_M_S2 / (air.density_kg_m3 * a.wing_area_m2 * cl)).sqrt();
     let least_drag_m_s = speed_at((cd0 / k).sqrt());
     Speeds {

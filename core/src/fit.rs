@@ -18,6 +18,7 @@ use settle::{Demand, Free, Governed, Met, STEPS};
 pub(crate) use slipstream::kept_share;
 use trail::Trail;
 
+mod answers;
 mod ceiling;
 mod crossings;
 mod dive;
@@ -41,6 +42,7 @@ mod top_speed;
 mod trail;
 mod worth;
 
+pub use answers::FIT_RADIUS_FRACTIONS;
 pub use ceiling::ceilings;
 pub use crossings::crossings;
 pub use envelope::envelope;

@@ -7,7 +7,7 @@ use crate::job::FlightPoint;
 use crate::result::{Figures, Meeting, Note, PointResult, SectionPoint, State, StationResult};
 use crate::rotor::element::{Balance, Element};
 use crate::rotor::{Coefficients, Condition, Loads, Ring, Rotor};
-use crate::section::{Best, Situation, best, working_band};
+use crate::section::{Situation, working_band};
 
 /// Mach number above which the corrections are not to be relied on: from about there shocks decide of lift
 /// and drag (common practice).
@@ -137,15 +137,9 @@ pub fn section_curve(rotor: &Rotor, ring: &Ring, at: &Condition) -> Vec<SectionP
         .collect()
 }
 
-/// The best angle of an element's section where it works; `None` where it nowhere lifts.
-#[must_use]
-pub fn best_of(element: &Element) -> Option<Best> {
-    best(|a| element.section.at(a), element.section.stall_rad())
-}
-
 fn add_section(s: &mut StationResult, element: &Element) {
     s.stall_angle_deg = finite(element.section.stall_rad().to_degrees());
-    if let Some(best) = best_of(element) {
+    if let Some(best) = element.section.best() {
         let (low, high) = working_band(|a| element.section.at(a), best);
         s.best_angle_deg = finite(best.alpha_rad.to_degrees());
         s.best_lift_to_drag = finite(best.lift_to_drag);

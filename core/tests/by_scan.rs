@@ -317,7 +317,7 @@ fn what_has_more_thrust_than_weight_has_no_angle_of_climb() {
     for (f, asked) in found.points.iter().filter_map(|p| p.full.as_ref().zip(p.asked_n)) {
         let sine = (f.thrust_n - asked) / weight;
         assert_eq!(f.climb_angle_deg.is_some(), sine.abs() <= 1.0, "{sine} {f:?}");
-        assert!(f.climb_angle_deg.is_none_or(|a| a.is_finite()), "{f:?}");
+        assert!(f.climb_angle_deg.is_none_or(f64::is_finite), "{f:?}");
         over += u32::from(sine > 1.0 && sine < 1.1);
     }
     assert!(over > 0);

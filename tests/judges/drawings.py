@@ -12,6 +12,7 @@ from ezdxf import units
 from shapely.affinity import translate
 from shapely.geometry import Polygon, box
 from shapely.ops import unary_union
+from told import within
 
 # By how much the upper card of a pair is drawn off the lower one, mm.
 LIFT = 4.0
@@ -42,10 +43,8 @@ for station, lower, upper in zip(stations, cards[0::2], cards[1::2]):
     assert len(left) == 1, (station["number"], [p.area for p in left])
     wood, section = left[0], Polygon(station["points_mm"])
     off = wood.area / section.area - 1
-    # Cards are drawn by the section's own points, to 1e-4 mm all round (the buffer above): 2.5e-4 of the smallest comes out.
-    assert abs(off) < 5e-4, (station["number"], off)
+    within("cards_area", abs(off), station["number"])
     move = [section.bounds[k] - wood.bounds[k] for k in (0, 1)]
     apart = translate(wood, *move).hausdorff_distance(section)
-    # The same, 3e-4 mm.
-    assert apart < 1e-3, (station["number"], apart)
+    within("cards_rim", apart, station["number"])
     print(f"station {station['number']}: {wood.area:.2f} mm2 between the cards, {100 * off:+.4f} %, apart {apart:.4f} mm")

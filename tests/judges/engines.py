@@ -34,7 +34,7 @@ def quiet(browser):
 def subjects(browser, asked, folder):
     """What is looked at, one after the other; what an engine cannot do is left to the others."""
     page = asked["page"]
-    yield "job", lambda: job.whole(browser, page, folder, asked["task"])
+    yield "job", lambda: job.whole(browser, page, folder, asked["task"], asked["axe"])
     yield "keyboard", lambda: keyboard.whole(browser, page, asked["keyboard"])
     yield "light and dark", lambda: look.light_and_dark(browser, page, asked["axe"])
     yield "motion", lambda: look.motion(browser, page)

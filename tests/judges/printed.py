@@ -11,5 +11,5 @@ from scale import judged
 pdf = pymupdf.open(sys.argv[1])
 assert len(pdf) == int(sys.argv[2]) > 3, len(pdf)
 size = [float(v) for v in sys.argv[3:5]]
-rulers = [judged(f"page {page.number + 1}", page, size) for page in pdf]
+rulers = [judged(f"page {page.number + 1}", page, size, by="chromium_") for page in pdf]
 print(f"{len(pdf)} pages, rulers {min(rulers):.3f} to {max(rulers):.3f} mm")

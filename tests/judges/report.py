@@ -6,15 +6,13 @@ report.py FILE WIDTH_MM HEIGHT_MM PART...
 import sys
 
 import pymupdf
-from scale import POINT
+from scale import judged_size
 
 pdf = pymupdf.open(sys.argv[1])
 size, parts = [float(v) for v in sys.argv[2:4]], sys.argv[4:]
 text, curves = "", 0
 for page in pdf:
-    found = [page.rect.width * POINT, page.rect.height * POINT]
-    # 6e-6 mm comes out.
-    assert all(abs(a - b) < 1e-3 for a, b in zip(found, size)), found
+    judged_size(f"page {page.number + 1}", page, size, "report")
     assert not page.get_images(), "a picture in dots"
     fonts = {font[3] for font in page.get_fonts()}
     assert fonts <= {"Helvetica", "Helvetica-Bold"}, fonts

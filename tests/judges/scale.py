@@ -1,5 +1,7 @@
 """Lengths on paper, for the judges that look at pages."""
 
+from told import within
+
 POINT = 25.4 / 72
 
 
@@ -14,13 +16,15 @@ def ruler_mm(page):
     return min(lines, key=lambda mm: abs(mm - 100), default=0.0)
 
 
-def judged(name, page, size):
-    """The page has the size and its ruler is 100 mm long; gives that length."""
+def judged_size(name, page, size, key):
+    """The page has the size, mm; `key` names what is allowed."""
     found = [page.rect.width * POINT, page.rect.height * POINT]
-    # The program's own sheets are within 2e-5 mm; Firefox prints pages of whole points: A4 as 596 by 842, 0.26 mm
-    # wider than asked. So one point is allowed.
-    assert all(abs(a - b) < POINT for a, b in zip(found, size)), (name, found)
+    within(key, max(abs(a - b) for a, b in zip(found, size)), f"{name}, {found}")
+
+
+def judged(name, page, size, by=""):
+    """The page has the size and its ruler is 100 mm long, as the program made it or as printed `by` a browser; gives that length."""
+    judged_size(name, page, size, f"{by}sheet")
     long = ruler_mm(page)
-    # Less than a pencil line; on the program's own sheets 4e-6 mm comes out.
-    assert abs(long - 100) < 0.1, (name, long)
+    within(f"{by}ruler", abs(long - 100), f"{name}, {long}")
     return long

@@ -15,12 +15,8 @@ import numpy as np
 from propeller import G0, RHO0, Air, Propeller
 from scipy.interpolate import PchipInterpolator
 from scipy.optimize import brentq, fsolve
+from told import within
 
-# Inflow angles, degrees: the program ends its search within 1e-12 rad, 6e-11 degrees; ten times that and more for a residual that is flat at its root.
-INFLOW_WITHIN_DEG = 1e-9
-# Rpm, as a share: the program's last secant step is below 3e-5 of the range it searches, which is about as wide as the rpm, and leaves a hundredth of
-# that at most.
-RPM_WITHIN = 3e-7
 # Rpm looked at for a fit, as shares of the program's: the highest root among them counts.
 SHARES = np.linspace(0.7, 1.3, 5)
 
@@ -114,15 +110,13 @@ for i, s in enumerate(asked["stations"]):
     if not windmill:
         found.append(both(at, found[0]))
         last = at, found[0]
-    off = max(abs(phi - s["inflow_rad"]) for phi in found)
-    worst = max(worst, off)
-    assert np.degrees(off) < INFLOW_WITHIN_DEG, f"station {i}: {np.degrees([*found, s['inflow_rad']])} deg, {s['name']}"
-print(f"{len(asked['stations'])} stations by SciPy, {driven} driven by the wind: inflow angle within {np.degrees(worst):.1e} deg")
+    off = np.degrees(max(abs(phi - s["inflow_rad"]) for phi in found))
+    worst = max(worst, within("inflow", off, f"station {i}, {s['name']}"))
+print(f"{len(asked['stations'])} stations by SciPy, {driven} driven by the wind: inflow angle within {worst:.1e} deg")
 worst = 0.0
 for f in asked["fits"]:
     found = fit(f, asked["jobs"][f["job"]], propellers[f["job"]])
-    off = abs(found / f["found_rpm"] - 1)
+    off = within("rpm", abs(found / f["found_rpm"] - 1), f"{f['name']}: {found} rpm, the program {f['found_rpm']}")
     worst = max(worst, off)
-    assert off < RPM_WITHIN, f"{f['name']}: {found} rpm, the program {f['found_rpm']}"
 print(f"{len(asked['fits'])} fits by SciPy: rpm within {worst:.1e}")
 print(cost_ms(*last))

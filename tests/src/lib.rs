@@ -10,6 +10,7 @@ pub mod goldstein_table;
 pub mod judge;
 pub mod page;
 pub mod reference;
+pub mod taken;
 pub mod tunnel;
 pub mod validation;
 pub mod wood_case;

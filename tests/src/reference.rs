@@ -66,7 +66,10 @@ pub fn job(inputs: &Value) -> Job {
         numbers(&blade["r_m"]).into_iter().zip(numbers(&blade["chord_m"])).zip(numbers(&blade["beta_deg"]));
     let stations: Vec<Value> = figures
         .map(|((r, c), b)| {
-            json!({"radius_fraction": r / radius, "chord_m": c, "angle_deg": b, "thickness_ratio": 0.1, "section": "reference"})
+            json!({
+                "radius_fraction": r / radius, "chord_m": c, "angle_deg": b,
+                "thickness_ratio": 0.1, "section": "reference"
+            })
         })
         .collect();
     let document = json!({
@@ -77,7 +80,9 @@ pub fn job(inputs: &Value) -> Job {
             "hub_diameter_m": 2.0 * blade["r_hub_m"].as_f64().expect("r_hub_m"),
             "stations": stations
         },
-        "flight_points": [{"name": "case", "airspeed_m_s": inputs["V"], "setting": {"kind": "rpm", "rpm": inputs["rpm"]}}],
+        "flight_points": [
+            {"name": "case", "airspeed_m_s": inputs["V"], "setting": {"kind": "rpm", "rpm": inputs["rpm"]}}
+        ],
         "sections": [section(&inputs["polar"])],
         "method": {"compressibility": false, "stall_delay": false}
     });

@@ -59,10 +59,16 @@ pub fn job(turn_deg: f64, n_crit: f64) -> Job {
     let stations: Vec<Value> = BLADE
         .iter()
         .map(|(x, c, beta, t)| {
-            json!({"radius_fraction": x, "chord_m": c * DIAMETER_M / 2.0, "angle_deg": beta, "thickness_ratio": t, "section": "clark-y"})
+            json!({
+                "radius_fraction": x, "chord_m": c * DIAMETER_M / 2.0, "angle_deg": beta,
+                "thickness_ratio": t, "section": "clark-y"
+            })
         })
         .collect();
-    let point = |name: String, rpm: f64, j: f64| json!({"name": name, "airspeed_m_s": j * rpm / 60.0 * DIAMETER_M, "setting": {"kind": "rpm", "rpm": rpm}});
+    let point = |name: String, rpm: f64, j: f64| {
+        let airspeed_m_s = j * rpm / 60.0 * DIAMETER_M;
+        json!({"name": name, "airspeed_m_s": airspeed_m_s, "setting": {"kind": "rpm", "rpm": rpm}})
+    };
     let moving = MEASURED.iter().map(|m| point(format!("J {}", m.0), 6_036.0, m.0));
     let points: Vec<Value> = moving.chain([point("at rest".into(), 6_457.0, 0.0)]).collect();
     let document = json!({

@@ -142,11 +142,15 @@ impl WoodCase {
             (-4..=8).map(|i| json!({"alpha_deg": 2 * i, "cl": 0.2 * f64::from(i), "cd": 0.01})).collect();
         let document = json!({
             "spokeshave": 1,
-            "propeller": {"blades": inputs["blade"]["blades"], "diameter_m": 2.0 * tip, "hub_diameter_m": 2.0 * root, "stations": stations},
+            "propeller": {
+                "blades": inputs["blade"]["blades"], "diameter_m": 2.0 * tip, "hub_diameter_m": 2.0 * root,
+                "stations": stations
+            },
             "sections": [{"name": "plain", "polars": [{"points": rows}]}],
             "flight_points": [{"name": "case", "airspeed_m_s": 20, "setting": {"kind": "rpm", "rpm": inputs["rpm"]}}],
             "wood": {"overspeed": 1.0, "species": {
-                "name": "case", "density_kg_m3": inputs["blade"]["rho_wood"], "modulus_pa": self.modulus_pa, "bending_strength_pa": 1e8
+                "name": "case", "density_kg_m3": inputs["blade"]["rho_wood"], "modulus_pa": self.modulus_pa,
+                "bending_strength_pa": 1e8
             }}
         });
         Job::from_json(&document.to_string()).expect("a valid job")

@@ -58,7 +58,10 @@ async fn an_edit_is_seen_first_in_the_departure() -> Result<()> {
         let (first, seen) = (least(&first), least(&seen));
         let (last, computing) = (least(&last), least(&computing));
         let share = browser.share_of_processor().await?;
-        println!("departure after {first:.1} ms, everything on the screen after {seen:.1} ms, on the page after {last:.1} ms");
+        println!(
+            "departure after {first:.1} ms, everything on the screen after {seen:.1} ms, on the page after \
+             {last:.1} ms"
+        );
         println!("{computing:.1} ms of computing, with {:.0} % of a processor", 100.0 * share);
         println!("aimed at: {FRAME_MS} ms and {AT_ONCE_MS} ms, on a machine that does nothing else");
         assert!(first <= seen && seen <= last, "the departure is the first thing to change");

@@ -37,6 +37,10 @@ held! {
     validate_plate_turbulent_karman_schoenherr
     validate_similar_flows_falkner_skan
     validate_linear_retardation_howarth
+    the_sixteen_series_has_its_published_ordinates
+    corrections_are_those_published
+    stall_delay_is_that_published
+    validate_windmill_brake_buhl
     whole_propellers_agree
     validate_tip_loss_goldstein
     validate_goldsteins_factor_of_the_core

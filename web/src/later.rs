@@ -9,10 +9,10 @@ use spokeshave::fit::Along;
 use spokeshave::result::Logged;
 use yew::UseStateSetter;
 
-use crate::app::{Later, RigRef};
 use crate::effect::after_frame::{Waiting, after_frame};
 use crate::keep;
 use crate::results::{CarvedFound, Results};
+use crate::results::{Later, RigRef};
 use crate::state::Opened;
 
 /// What has to be worked out.

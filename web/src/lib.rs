@@ -3,12 +3,14 @@
 //! One direction: [`state`] (pure: actions to state) → [`results`] (what the core computes, kept by what it
 //! depends on) → views. The browser is touched at the edges only: [`keep`], [`saved_page`], `effect`.
 
+pub mod act;
 pub mod app;
 pub mod background;
 pub mod blade_view;
 pub mod chart;
 pub mod editor;
 pub mod effect;
+pub mod form;
 pub mod keep;
 pub mod later;
 pub mod number;

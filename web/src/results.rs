@@ -1,6 +1,10 @@
 //! What is computed for the page, kept by the part of the job it depends on, so that an edit works out again
 //! only what it changed. The title, the wood and other flight points do not touch a point's results.
 
+mod frames;
+
+pub use frames::{Compared, Later, Now, RigRef, Same};
+
 use std::rc::Rc;
 
 use spokeshave::carved;

@@ -4,7 +4,7 @@ use spokeshave::fit::Along;
 use spokeshave::job::{DEMOS, Figure, Job};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rig::Rig;
-use spokeshave_web::app::RigRef;
+use spokeshave_web::act::Seen;
 use spokeshave_web::background::shape::{Order, Report, Task, carried_out};
 use spokeshave_web::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Planform, RadiusAxis, StationCard,
@@ -12,8 +12,8 @@ use spokeshave_web::blade_view::{
 use spokeshave_web::chart::line::{Axis, LineChart, Series};
 use spokeshave_web::chart::unit::Unit;
 use spokeshave_web::results::Offered;
+use spokeshave_web::results::RigRef;
 use spokeshave_web::state::{Action, Beside, State, Variant};
-use spokeshave_web::view::Seen;
 use spokeshave_web::view::fit::FitPanel;
 use spokeshave_web::view::machine::{AircraftPanel, EnginePanel};
 use spokeshave_web::view::shape::{ChartDrawing, CostDrawings, ShapePanel};

@@ -8,8 +8,8 @@ use thiserror::Error;
 pub enum Fault {
     /// A section has no outline, or not at that thickness.
     #[error(
-        "station {station}, r {radius_mm:.1} mm: section \"{section}\" has no outline that can be drawn {percent:.1} % \
-         thick; 1 to 60 % can be drawn, of a section whose outline is known"
+        "station {station}, r {radius_mm:.1} mm: section \"{section}\" has no outline that can be drawn \
+         {percent:.1} % thick; 1 to 60 % can be drawn, of a section whose outline is known"
     )]
     NoOutline {
         /// Number of the station, from 1.
@@ -23,8 +23,8 @@ pub enum Fault {
     },
     /// A station lies inside the hub.
     #[error(
-        "station {station}, r {radius_mm:.1} mm: {by_mm:.1} mm inside the hub, whose radius is {hub_mm:.1} mm; leave it \
-         out or make the propeller's hub diameter smaller"
+        "station {station}, r {radius_mm:.1} mm: {by_mm:.1} mm inside the hub, whose radius is {hub_mm:.1} \
+         mm; leave it out or make the propeller's hub diameter smaller"
     )]
     InsideHub {
         /// Number of the station, from 1.
@@ -83,8 +83,8 @@ pub enum Fault {
     },
     /// A section at the hub reaches past its boss.
     #[error(
-        "r {radius_mm:.1} mm: the section is {needed_mm:.1} mm high along the axis where it enters the hub, and passes \
-         the boss of {given_mm:.1} mm by {by_mm:.1} mm"
+        "r {radius_mm:.1} mm: the section is {needed_mm:.1} mm high along the axis where it enters the hub, \
+         and passes the boss of {given_mm:.1} mm by {by_mm:.1} mm"
     )]
     CrossesHub {
         /// Radius where it does, mm.
@@ -98,8 +98,8 @@ pub enum Fault {
     },
     /// The hub's holes reach past its boss.
     #[error(
-        "hub drilling: the holes reach {reach_mm:.1} mm from the axis, {by_mm:.1} mm farther than a boss of radius {hub_mm:.1} mm can hold; a smaller \
-         bolt circle or a larger hub diameter of the propeller"
+        "hub drilling: the holes reach {reach_mm:.1} mm from the axis, {by_mm:.1} mm farther than a boss of \
+         radius {hub_mm:.1} mm can hold; a smaller bolt circle or a larger hub diameter of the propeller"
     )]
     DrilledPastBoss {
         /// How far they reach, mm.

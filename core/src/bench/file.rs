@@ -1,6 +1,6 @@
 //! Every file of the bench with its name.
 
-use crate::cautions;
+use crate::caution::cautions;
 
 use super::page::{Paper, Sheet, lay};
 use super::sheet::{leaves, machine_drawings};

@@ -47,7 +47,8 @@ impl Stock {
         match self {
             Self::Wood => "Glue up the blank",
             Self::Plastic => {
-                "Make the block (or print or mill the solid from its STL file, layers along the blade, and go on at step 7)"
+                "Make the block (or print or mill the solid from its STL file, layers along the blade, and \
+                 go on at step 7)"
             }
             Self::Laminate => {
                 "Lay up the block, fibres along the blade (or mould the blade from its STL file, and go on at step 7)"

@@ -167,7 +167,8 @@ fn counted(sheet: &Sheet, row: &Row, p: &Propeller, fault: SheetError) -> SheetE
     station.map_or(fault, |station| {
         let radius_mm = 500.0 * p.diameter_m * station.radius_fraction;
         let allowed = format!(
-            "a share of the tip radius, 0.001 to 1; perhaps it is the number of a station: write {:.4} here, or {radius_mm:.1} in a column radius_mm",
+            "a share of the tip radius, 0.001 to 1; perhaps it is the number of a station: write {:.4} \
+             here, or {radius_mm:.1} in a column radius_mm",
             station.radius_fraction
         );
         sheet.refused(row, "station", &allowed)

@@ -42,7 +42,9 @@ pub enum CarvedError {
     NoReadings,
     /// Readings of which none is believed.
     #[error(
-        "every reading is hard to believe and none is confirmed: mend them, or confirm those that are right. {}", .0.join("; ")
+        "every reading is hard to believe and none is confirmed: mend them, or confirm those that are \
+         right. {}",
+        .0.join("; ")
     )]
     NoneBelieved(Vec<String>),
     /// A flight point without an answer for the drawn blade.
@@ -50,11 +52,15 @@ pub enum CarvedError {
     NoAnswer(String),
     /// A blade without readings, beside which no other may be cut.
     #[error(
-        "blade {0} has no reading that counts: read every blade before one is cut, for a blade cut alone may be set farther from the others"
+        "blade {0} has no reading that counts: read every blade before one is cut, for a blade cut alone \
+         may be set farther from the others"
     )]
     Unread(usize),
     /// The carved blade is not one a job may have.
-    #[error("the readings give a blade that cannot be: {}", .0.iter().map(ToString::to_string).collect::<Vec<_>>().join("; "))]
+    #[error(
+        "the readings give a blade that cannot be: {}",
+        .0.iter().map(ToString::to_string).collect::<Vec<_>>().join("; ")
+    )]
     Refused(Vec<Problem>),
     /// The same, found in the blade itself.
     #[error(transparent)]

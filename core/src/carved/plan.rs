@@ -17,7 +17,6 @@ use super::piece::Piece;
 use super::plane::{Profile, Slab};
 use crate::fit;
 use crate::job::Setting;
-use crate::report::best_of;
 use crate::result::{Known, PlannedBlade, PlannedStation, RemovalPlan};
 use crate::rig::{Rig, air_of};
 use crate::rotor::Condition;
@@ -61,9 +60,9 @@ fn wanted(rig: &Rig, planned: &Measured, at: &Condition) -> Result<Vec<f64>, Car
     let mean = Set::new(rig, planned)?.mean.rotor;
     let angle = |r: f64| {
         let as_drawn = rig.rotor.element(&rig.rotor.ring(r), at).0;
-        let (drawn, best) = (as_drawn.balance()?, best_of(&as_drawn)?);
+        let (drawn, best) = (as_drawn.balance()?, as_drawn.section.best()?);
         let element = mean.element(&mean.ring(r), at).0;
-        let alpha = best_of(&element)?.alpha_rad + drawn.alpha_rad - best.alpha_rad;
+        let alpha = element.section.best()?.alpha_rad + drawn.alpha_rad - best.alpha_rad;
         let balance = element.balance_at(alpha).filter(|b| b.loss > LEAST_FACTOR)?;
         Some(balance.inflow_rad + alpha - at.turn_rad)
     };

@@ -17,8 +17,9 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
         worked_out(flow, told, point);
     }
     flow.text(
-        "Departure: angle of attack less the angle of best lift-to-drag at that station's Reynolds and Mach number. Band: the departures that \
-         keep 95 % of the best lift-to-drag; a star marks a station outside it.",
+        "Departure: angle of attack less the angle of best lift-to-drag at that station's Reynolds and Mach \
+         number. Band: the departures that keep 95 % of the best lift-to-drag; a star marks a station \
+         outside it.",
     );
 }
 

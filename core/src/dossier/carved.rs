@@ -36,7 +36,10 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
         flow.heading(&format!("Blade {}, readings: {}", blade.blade, blade.readings));
         differences(flow, blade, &length);
     }
-    flow.text("Angles to the chord line. A star marks what was not read there but taken from between the readings, from beyond them, or as drawn.");
+    flow.text(
+        "Angles to the chord line. A star marks what was not read there but taken from between the \
+         readings, from beyond them, or as drawn.",
+    );
     let chart = off(carved, length);
     if chart.shows() {
         flow.charts(&[chart]);

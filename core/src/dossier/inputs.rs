@@ -32,7 +32,8 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     points(flow, told);
     if let Some(factors) = job.logbook.as_ref().filter(|l| l.in_use).and_then(|l| l.factors) {
         flow.text(&format!(
-            "Every figure uses what the logbook told: engine power times {:.3}, drag area times {:.3}, power the propeller takes times {:.3}.",
+            "Every figure uses what the logbook told: engine power times {:.3}, drag area times {:.3}, \
+             power the propeller takes times {:.3}.",
             factors.engine_power, factors.drag_area, factors.propeller_power
         ));
     }

@@ -11,8 +11,8 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     flow.part("Method and validity");
     flow.facts(&methods(told));
     flow.text(
-        "It leaves out yawed and oblique flow, the fuselage beyond the numbers given, wake contraction, ice and dirt. Bending and twist under \
-         load are told under Strength and are not in the other figures.",
+        "It leaves out yawed and oblique flow, the fuselage beyond the numbers given, wake contraction, ice \
+         and dirt. Bending and twist under load are told under Strength and are not in the other figures.",
     );
     flow.heading("Tables of the sections");
     for family in &told.rig.rotor.blade.families {
@@ -58,7 +58,8 @@ fn methods(told: &Told) -> Vec<(&'static str, String)> {
         job.aircraft.as_ref().map_or("", |_| "parabolic drag polar or weight; lift equal to weight");
     let strength = told.strength.as_ref().map_or_else(String::new, |s| {
         format!(
-            "slender beam on the outlines' own sections, steady loads of every flight point, a standing start and an overspeed; material: {}",
+            "slender beam on the outlines' own sections, steady loads of every flight point, a standing \
+             start and an overspeed; material: {}",
             s.material.source
         )
     });

@@ -22,9 +22,11 @@ pub use scale::{Scale, Scales};
 
 use crate::bench::{Paper, Sheet, bind};
 use crate::carved::{self as carved_blades, CarvedError, usual_point};
+use crate::caution::cautions;
+use crate::fit::{self, FIT_RADIUS_FRACTIONS};
 use crate::result::{Carved, Envelope, PointResult, RemovalPlan};
-use crate::rig::{FIT_RADIUS_FRACTIONS, Rig};
-use crate::{fit, wood};
+use crate::rig::Rig;
+use crate::wood;
 use flow::Flow;
 
 /// Speeds of the curves over airspeed.
@@ -73,7 +75,7 @@ pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper, point: Option<usize>) -
     let mut flow = Flow::new(paper, "Verdict");
     verdict::write(&mut flow, &told);
     flow.part("Before you act");
-    flow.list(&crate::cautions(&rig.job));
+    flow.list(&cautions(&rig.job));
     inputs::write(&mut flow, &told);
     method::write(&mut flow, &told);
     curves::write(&mut flow, &told);
@@ -83,5 +85,5 @@ pub fn dossier(rig: &Rig, scales: &Scales, paper: Paper, point: Option<usize>) -
     carved::write(&mut flow, &told);
     logbook::write(&mut flow, &told);
     let title = if rig.job.title.is_empty() { "Propeller" } else { &rig.job.title };
-    bind(title, flow.pages(), paper, &crate::cautions(&rig.job))
+    bind(title, flow.pages(), paper, &cautions(&rig.job))
 }

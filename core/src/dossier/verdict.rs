@@ -15,7 +15,11 @@ const MACH: Scale = Scale::fixed("", 1.0, 2);
 pub(super) fn write(flow: &mut Flow, told: &Told) {
     let title = &told.rig.job.title;
     flow.title(if title.is_empty() { "Propeller" } else { title });
-    flow.text("Report of a propeller job by Spokeshave: what it is made for, what it does, how that was worked out, how it is carved and what was measured. Every figure is an estimate that needs margin and test.");
+    flow.text(
+        "Report of a propeller job by Spokeshave: what it is made for, what it does, how that was worked \
+         out, how it is carved and what was measured. Every figure is an estimate that needs margin and \
+         test.",
+    );
     flow.blanks(&["Propeller number", "Made by", "Inspected by", "Date"]);
     flow.part("Verdict");
     points(flow, &briefs(told.rig), told.scales, None);

@@ -12,7 +12,8 @@ impl<'de> Deserialize<'de> for AltitudeLaw {
             Value::String(word) if word == "naturally-aspirated" => Ok(Self::NaturallyAspirated),
             value @ Value::Object(_) => rest(value).map(Self::HeldTo),
             other => Err(D::Error::custom(format!(
-                "{other} is not known; allowed are \"naturally-aspirated\" and {{\"kind\": \"held-to\", \"altitude_m\": …}}"
+                "{other} is not known; allowed are \"naturally-aspirated\" and {{\"kind\": \"held-to\", \
+                 \"altitude_m\": …}}"
             ))),
         }
     }

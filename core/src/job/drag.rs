@@ -3,17 +3,26 @@
 use std::f64::consts::PI;
 
 use super::Drag;
-use crate::aircraft::induced_factor;
 
 /// Oswald factor that an aspect ratio is worked out with: common practice for a plain wing on a small
 /// aircraft.
 const USUAL_OSWALD: f64 = 0.8;
 
 impl Drag {
+    /// `k` as given, or `1/(π e AR)`.
+    #[must_use]
+    pub fn induced_factor(&self) -> f64 {
+        match (self.k, self.aspect_ratio, self.oswald) {
+            (Some(k), _, _) => k,
+            (None, Some(ar), Some(e)) => 1.0 / (PI * e * ar),
+            _ => 0.0,
+        }
+    }
+
     /// The same drag by its induced-drag factor.
     #[must_use]
     pub fn by_factor(&self) -> Self {
-        Self { cd0: self.cd0, k: Some(induced_factor(self)), aspect_ratio: None, oswald: None }
+        Self { cd0: self.cd0, k: Some(self.induced_factor()), aspect_ratio: None, oswald: None }
     }
 
     /// The same drag by aspect ratio and Oswald factor: as given, else the ratio that makes it so with the
@@ -21,7 +30,7 @@ impl Drag {
     #[must_use]
     pub fn by_aspect_ratio(&self) -> Self {
         let oswald = self.oswald.unwrap_or(USUAL_OSWALD);
-        let ratio = 1.0 / (PI * oswald * induced_factor(self));
+        let ratio = 1.0 / (PI * oswald * self.induced_factor());
         Self {
             cd0: self.cd0,
             k: None,

@@ -32,7 +32,7 @@ impl Found {
     pub(super) fn range(&mut self, path: String, value: f64, range: RangeInclusive<f64>, unit: &str) {
         if !range.contains(&value) {
             let unit = if unit.is_empty() { String::new() } else { format!(" {unit}") };
-            self.refuse(path, value, format!("{} to {}{unit}", range.start(), range.end()));
+            self.refuse(path, value, format!("{} to {}{unit}", short(*range.start()), short(*range.end())));
             self.within(*range.start(), *range.end());
         }
     }
@@ -54,4 +54,14 @@ impl Found {
             self.refuse(path.into(), found, format!("{} to {}", range.start(), range.end()));
         }
     }
+}
+
+/// A bound to six figures, as people read it.
+fn short(bound: f64) -> f64 {
+    let size = bound.abs();
+    if !(1e-9..1e9).contains(&size) {
+        return bound;
+    }
+    let unit = 10_f64.powi(5 - size.log10().floor() as i32);
+    (bound * unit).round() / unit
 }

@@ -84,6 +84,9 @@ fn syntax_error(file: &str, e: &serde_json::Error) -> JobError {
         _ if file.trim_start().starts_with('<') => {
             "this is a page; a page with a job inside opens in the browser itself"
         }
+        _ if !file.trim_start_matches('\u{feff}').trim_start().starts_with('{') => {
+            "a job file is text that begins with {; this is something else"
+        }
         _ if e.is_eof() => "the text ends in the middle; part of the file is missing",
         Some((what, _)) => what,
         None => &text,

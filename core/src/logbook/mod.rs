@@ -56,13 +56,15 @@ pub enum LogbookError {
     NoEngine,
     /// A governor.
     #[error(
-        "a governor holds the rpm of this propeller and no reading is below it, so that the angle of the blades is not known; log a run at full \
-         throttle, or level flight, that stays below the governed rpm with the blades on the fine stop"
+        "a governor holds the rpm of this propeller and no reading is below it, so that the angle of the \
+         blades is not known; log a run at full throttle, or level flight, that stays below the governed \
+         rpm with the blades on the fine stop"
     )]
     Governed,
     /// No reading tells anything.
     #[error(
-        "no reading tells anything: one is needed at full throttle, in steady level flight, or with a fuel flow or current"
+        "no reading tells anything: one is needed at full throttle, in steady level flight, or with a fuel \
+         flow or current"
     )]
     NothingTold,
 }
@@ -119,7 +121,8 @@ pub fn estimate(rig: &Rig) -> Result<Logged, LogbookError> {
 }
 
 /// What is said of a reading at the governed rpm.
-const HIDDEN: &str = "tells nothing: at the governed rpm the angle of the blades is not known; one below it, on the fine stop, would tell";
+const HIDDEN: &str = "tells nothing: at the governed rpm the angle of the blades is not known; one below \
+    it, on the fine stop, would tell";
 /// Share of the governed rpm below which the blades are on the fine stop.
 const BELOW: f64 = 0.985;
 

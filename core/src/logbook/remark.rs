@@ -27,7 +27,8 @@ pub(super) fn of_all(
     }
     if !tells(Told::Consumption) {
         remarks.push(format!(
-            "No {flow} was read: rpm alone tells how strong the {0} is for this propeller, not whether the {0} is weak or the propeller heavy to turn.",
+            "No {flow} was read: rpm alone tells how strong the {0} is for this propeller, not whether the \
+             {0} is weak or the propeller heavy to turn.",
             engine.to_lowercase()
         ));
     }
@@ -68,7 +69,9 @@ pub(super) fn of_reading(
     if !tells {
         let piston = matches!(rig.shaft, Some(Shaft::Piston(_)));
         return if piston && r.throttle.is_some_and(|t| t < 1.0) {
-            "tells nothing: what a part of full throttle gives is not known; a fuel flow or level flight would tell".into()
+            "tells nothing: what a part of full throttle gives is not known; a fuel flow or level flight \
+             would tell"
+                .into()
         } else {
             "tells nothing: neither full throttle nor level flight nor a consumption, or no answer there"
                 .into()

@@ -69,7 +69,7 @@ impl Limit {
         match self {
             Self::TipMachMost => format!("Mach {value:.3}"),
             Self::DiameterMost | Self::BlankWidthMost | Self::BlankDepthMost => {
-                format!("{:.1} mm", 1e3 * value)
+                format!("{:.1} mm ({:.2} in)", 1e3 * value, value / 0.0254)
             }
             Self::StressMarginLeast => format!("{value:.3}"),
             Self::EnginePower => format!("{:.3} kW", 1e-3 * value),

@@ -36,7 +36,8 @@ impl RemovalPlan {
                 String::new()
             };
             all.push(format!(
-                "{worse}Then take about {:.1} g more off the back of blade {heavy} round three quarters of the radius, evenly and a little at a time, and hang it up again.",
+                "{worse}Then take about {:.1} g more off the back of blade {heavy} round three quarters of \
+                 the radius, evenly and a little at a time, and hang it up again.",
                 is.grams_at_tip / BALANCE_AT
             ));
         }

@@ -122,8 +122,9 @@ impl Twist {
             (true, Some(all)) => {
                 let all = format!("{all:+.2}").replace('-', "−");
                 format!(
-                    "The governor sets the pitch: at the rpm it holds all solved stations depart alike, by {all}° from their best \
-                     angle. No twist changes that; another rpm, diameter or chord does."
+                    "The governor sets the pitch: at the rpm it holds all solved stations depart alike, by \
+                     {all}° from their best angle. No twist changes that; another rpm, diameter or chord \
+                     does."
                 )
             }
         }

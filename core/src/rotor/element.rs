@@ -22,7 +22,7 @@ use std::f64::consts::{FRAC_PI_2, FRAC_PI_4, PI};
 use roots::{SimpleConvergency, find_root_brent};
 
 use super::loss::Ends;
-use crate::section::{Coefficients, Local};
+use crate::section::{Best, Coefficients, Local, best};
 
 /// The section at an element: one family, or two blended.
 #[derive(Clone, Copy, Debug)]
@@ -61,6 +61,12 @@ impl<'f> Blend<'f> {
     #[must_use]
     pub fn stall_rad(&self) -> f64 {
         self.parts().map(|(l, w)| w * l.landmarks().stall).sum()
+    }
+
+    /// The best angle; `None` where it nowhere lifts.
+    #[must_use]
+    pub fn best(&self) -> Option<Best> {
+        best(|a| self.at(a), self.stall_rad())
     }
 
     /// The most that its coefficients rise with the angle of attack; see [`Local::steepest`].

@@ -4,7 +4,7 @@ use ndarray::Array2;
 
 use super::element::{Balance, Near};
 use super::{Condition, Ring, Rotor};
-use crate::section::{Best, best};
+use crate::section::Best;
 
 /// One cell of the map. Figures are `None` where there is no load or no best angle.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
@@ -77,10 +77,7 @@ impl BestLine {
     fn new(rotor: &Rotor, ring: &Ring, line: &[Condition]) -> Self {
         let count = line.len().div_ceil(BEST_EVERY) + 1;
         let last = line.len().saturating_sub(1);
-        let node = |k: usize| {
-            let element = rotor.element(ring, line.get((k * BEST_EVERY).min(last))?).0;
-            best(|a| element.section.at(a), element.section.stall_rad())
-        };
+        let node = |k: usize| rotor.element(ring, line.get((k * BEST_EVERY).min(last))?).0.section.best();
         Self { nodes: (0..count).map(node).collect(), last }
     }
 
@@ -99,7 +96,6 @@ impl BestLine {
 #[cfg(test)]
 mod tests {
     use super::*;
-    use crate::report::best_of;
     use crate::rotor::tests::{at_speed, rotor};
 
     /// Speed, rpm and blade angle all change along the line, so that Reynolds and Mach number do.
@@ -124,7 +120,7 @@ mod tests {
         let mut changes = 0;
         for (row, &r) in radii.iter().enumerate() {
             let ring = rotor.ring(r);
-            let best = |i: usize| best_of(&rotor.element(&ring, &line[i]).0).unwrap();
+            let best = |i: usize| rotor.element(&ring, &line[i]).0.section.best().unwrap();
             for (column, at) in line.iter().enumerate() {
                 let element = rotor.element(&ring, at).0;
                 let balance = element.balance().unwrap();
@@ -153,7 +149,7 @@ mod tests {
         for count in [1, 2, 8, 9, 12, 16, 17] {
             let (line, ring) = (&line[line.len() - count..], rotor.ring(0.5));
             let element = rotor.element(&ring, &line[count - 1]).0;
-            let wanted = element.balance().unwrap().alpha_rad - best_of(&element).unwrap().alpha_rad;
+            let wanted = element.balance().unwrap().alpha_rad - element.section.best().unwrap().alpha_rad;
             let map = departure_map(&rotor, line, &[0.5]);
             let found = map.cells[[0, count - 1]].departure_deg.unwrap();
             assert!((found - wanted.to_degrees()).abs() < 1e-6, "{count}: {found} {wanted}");

@@ -6,7 +6,6 @@
 //! too small.
 
 use super::{Condition, Rotor};
-use crate::report::best_of;
 
 /// What the air does to one blade.
 #[derive(Clone, Copy, Debug, Default, PartialEq)]
@@ -54,14 +53,13 @@ impl Rotor {
     pub fn departure_deg(&self, blade: &Self, radius_m: f64, at: &Condition) -> Option<f64> {
         let flow = self.element(&self.ring(radius_m), at).0.balance()?;
         let element = blade.element(&blade.ring(radius_m), at).0;
-        let best = best_of(&element)?;
+        let best = element.section.best()?;
         Some((element.angle_rad - flow.inflow_rad - best.alpha_rad).to_degrees())
     }
 }
 
 #[cfg(test)]
 mod tests {
-    use super::*;
     use crate::rotor::tests::{at_speed, rotor};
 
     /// What equal blades carry adds up to the whole, and each one's moments to those of the load by radius.
@@ -100,7 +98,8 @@ mod tests {
         });
         let (at, r) = (at_speed(40.0), 0.7 * mean.blade.radius_m);
         let element = mean.element(&mean.ring(r), &at).0;
-        let own = (element.balance().unwrap().alpha_rad - best_of(&element).unwrap().alpha_rad).to_degrees();
+        let own =
+            (element.balance().unwrap().alpha_rad - element.section.best().unwrap().alpha_rad).to_degrees();
         let departures = [&mean, &steeper].map(|blade| mean.departure_deg(blade, r, &at).unwrap());
         assert!((departures[0] - own).abs() < 1e-9, "{departures:?} {own}");
         assert!((departures[1] - own - 1.5).abs() < 1e-9, "{departures:?} {own}");

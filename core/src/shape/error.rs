@@ -62,7 +62,8 @@ pub enum ShapeError {
     },
     /// No station carries its best lift.
     #[error(
-        "no station of the blade can carry the lift of its best angle at {name}: the chords are too wide for this speed and rpm"
+        "no station of the blade can carry the lift of its best angle at {name}: the chords are too wide \
+         for this speed and rpm"
     )]
     NoStation {
         /// The first flight point that counts.

@@ -18,7 +18,6 @@ use super::variant::{accepted, rounded, with_angles};
 use super::{ShapeError, Shaped};
 use crate::fit::{self, Near};
 use crate::job::{PitchControl, Setting};
-use crate::report::best_of;
 use crate::result::{Origin, Twist, TwistStation};
 use crate::rig::{Rig, air_of};
 use crate::rotor::Condition;
@@ -154,7 +153,7 @@ fn solved(rig: &Rig, radius_m: f64, counted: &[Counted], by: TwistBy) -> Option<
     let mut wanted: Vec<Wanted> = Vec::new();
     for c in counted {
         let element = rig.rotor.element(&ring, &c.at).0;
-        let Some(best) = best_of(&element) else { continue };
+        let Some(best) = element.section.best() else { continue };
         let Some(balance) = element.balance_at(best.alpha_rad).filter(|b| loaded(rig, radius_m, b)) else {
             continue;
         };
@@ -182,7 +181,7 @@ fn alike(rig: &Rig, counted: &[Counted]) -> Vec<Option<f64>> {
         let one = |c: &Counted| {
             let element = rig.rotor.element(&ring, &c.at).0;
             let (best, balance) =
-                (best_of(&element)?, element.balance().filter(|b| loaded(rig, radius_m, b))?);
+                (element.section.best()?, element.balance().filter(|b| loaded(rig, radius_m, b))?);
             Some((c.weight, c.weight * (balance.alpha_rad - best.alpha_rad)))
         };
         let known: Option<Vec<(f64, f64)>> = counted.iter().map(one).collect();
@@ -271,7 +270,7 @@ fn stations(drawn: &Rig, shaped: &Rig, origins: &[Origin], counted: &[Counted]) 
         let ring = shaped.rotor.ring(r);
         let departures = counted.iter().map(|c| {
             let element = shaped.rotor.element(&ring, &c.at).0;
-            let (best, balance) = (best_of(&element)?, element.balance()?);
+            let (best, balance) = (element.section.best()?, element.balance()?);
             Some((balance.alpha_rad - best.alpha_rad).to_degrees())
         });
         TwistStation {

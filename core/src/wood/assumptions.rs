@@ -14,8 +14,9 @@ pub(super) fn assumptions(rig: &Rig, beam: &BladeBeam, cases: &[CaseResult]) -> 
     all.push(format!("Values: {}. {}", beam.material.source, sound(rig)));
     all.push(format!("{} The blade is clamped at the edge of the hub.", stands(beam)));
     all.push(
-        "Steady load only, without gyroscopic load, gust, engine pulse or strike. Bending is what is left when centrifugal force has pulled \
-         the bent blade straighter; a stiffer piece of wood than the mean is relieved less."
+        "Steady load only, without gyroscopic load, gust, engine pulse or strike. Bending is what is left \
+         when centrifugal force has pulled the bent blade straighter; a stiffer piece of wood than the mean \
+         is relieved less."
             .into(),
     );
     all.extend(beam.places.iter().filter_map(|p| Some(doubt(p.station?, p.doubt?, p.thickness_ratio))));
@@ -64,8 +65,9 @@ fn stands(beam: &BladeBeam) -> String {
         format!("{:.1} mm {}", mm.abs(), if mm < 0.0 { other } else { one })
     };
     format!(
-        "The sections stand on the job's stacking line, on a blade that {leaning}: their centroids lie up to {} and {} of the radius through the \
-         axis, and centrifugal force bends and twists the blade by it.",
+        "The sections stand on the job's stacking line, on a blade that {leaning}: their centroids lie up \
+         to {} and {} of the radius through the axis, and centrifugal force bends and twists the blade by \
+         it.",
         side(ahead, "ahead", "aft"),
         side(behind, "behind (against the turning)", "before")
     )

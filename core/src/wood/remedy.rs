@@ -164,10 +164,13 @@ fn restored(all: &[StressStation], say: &Say) -> String {
         .filter_map(|s| Some(format!("{} at station {}", (say.length)(s.thicker_m?), s.station?)))
         .collect();
     if missing.is_empty() {
-        return "Even twice the thickness does not restore it: fewer revolutions, more chord or a stronger material would.".into();
+        return "Even twice the thickness does not restore it: fewer revolutions, more chord or a stronger \
+                material would."
+            .into();
     }
     format!(
-        "More thickness restores it everywhere, weight and stiffness taken into account, the air's load as it is: {}.",
+        "More thickness restores it everywhere, weight and stiffness taken into account, the air's load as \
+         it is: {}.",
         missing.join(", ")
     )
 }

@@ -32,13 +32,15 @@ fn lines(beam: &BladeBeam, speeds_rad_s: &[f64]) -> Vec<FrequencyLine> {
     let bending: Option<Vec<Vec<BendingMode>>> = speeds_rad_s.iter().map(|w| bending(beam, *w)).collect();
     let twist: Option<Vec<Vec<f64>>> =
         speeds_rad_s.iter().map(|w| twist::frequencies_rad_s(beam, *w, TWIST)).collect();
-    let mut all = Vec::new();
+    let mut all: Vec<FrequencyLine> = Vec::new();
+    // Each kind is counted by itself, from the slowest.
+    let next = |all: &[FrequencyLine], mode| 1 + all.iter().filter(|line| line.mode == mode).count();
     for number in 0..BENDING {
         let Some(modes) = &bending else { break };
         let out = modes[0][number].out_share;
         let mode = if out >= 0.5 { ModeKind::Flap } else { ModeKind::Lag };
         let hz = modes.iter().map(|m| m[number].rad_s / TAU).collect();
-        all.push(FrequencyLine { mode, number: number + 1, rpm: rpm.clone(), hz });
+        all.push(FrequencyLine { mode, number: next(&all, mode), rpm: rpm.clone(), hz });
     }
     for number in 0..TWIST {
         let Some(found) = &twist else { break };

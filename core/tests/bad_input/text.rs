@@ -14,7 +14,7 @@ fn broken_text_is_refused_with_its_line() {
     }
     let twice = text.replacen("\"chord_m\":", "\"chord_m\": 0.2, \"chord_m\":", 1);
     let said = Job::from_json(&twice).unwrap_err().to_string();
-    assert!(said.contains("column 27: the key \"chord_m\" stands twice"), "{said}");
+    assert!(said.contains("column 33: the key \"chord_m\" stands twice"), "{said}");
     let not_finite = text.replace("430.0", "1e999");
     assert!(Job::from_json(&not_finite).unwrap_err().to_string().contains("line"));
 }

@@ -37,7 +37,7 @@ class Firefox:
         return self.client.execute_script(script, given, sandbox=None)
 
     def wait_for(self, script):
-        return self.client.execute_async_script(script, sandbox=None, script_timeout=60000)
+        return self.client.execute_async_script(script, sandbox=None, script_timeout=150000)
 
     def find(self, css):
         return self.client.find_element(ELEMENT, css)

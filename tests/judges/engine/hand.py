@@ -80,9 +80,18 @@ def still(browser, css):
 
 
 def fold_out(browser, panel):
-    """Opens a panel by its heading."""
-    hit(browser, f"#{panel} > summary")
-    until(f"{panel} open", lambda: browser.run("return document.getElementById(arguments[0]).open", panel))
+    """Opens a panel by its heading, where it is not."""
+    is_open = lambda: browser.run("return document.getElementById(arguments[0]).open", panel)
+    if not is_open():
+        hit(browser, f"#{panel} > summary")
+        until(f"{panel} open", is_open)
+
+
+def fold_out_all(browser):
+    """Opens every panel and waits until all of it is worked out."""
+    for panel in browser.run("return [...document.querySelectorAll('details.panel:not([open])')].map(panel => panel.id)"):
+        fold_out(browser, panel)
+    until("everything worked out", lambda: "Working out" not in browser.run("return document.body.innerText"))
 
 
 def box(label):

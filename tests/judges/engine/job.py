@@ -1,14 +1,16 @@
 """One job from the drawing to the logbook: changed, shaped, measured, flown, saved, opened again, read in inches."""
 
+import re
 import shutil
 from pathlib import Path
 
-from engine.hand import BACK, ENTER, box, enter, fold_out, hit, near, open_page, press, says, shows, started, until
+from engine.hand import BACK, ENTER, box, enter, fold_out, fold_out_all, hit, near, open_page, press, says, shows, started, until
+from engine.look import rules
 
 INCH_M = 0.0254
 
 
-def whole(browser, page, folder, task):
+def whole(browser, page, folder, task, axe):
     station = task["station"]
     open_page(browser, page)
     shows(browser, station, task["drawn"])
@@ -16,9 +18,14 @@ def whole(browser, page, folder, task):
     shape(browser, task)
     carve(browser, task)
     log(browser, task)
+    change(browser, task)
+    hold(browser, task)
+    take_away(browser, folder, task)
     save(browser, folder)
     reopen(browser, folder, task)
     inches(browser, task)
+    fold_out_all(browser)
+    rules(browser, axe, "after the whole job, everything open")
 
 
 def edit(browser, page, task):
@@ -67,6 +74,43 @@ def log(browser, task):
     until("the first box of the reading", lambda: browser.run(first))
     browser.keys(task["log_rpm"] + ENTER + "full" + ENTER)
     cells(browser, "Factors found", 0, task["factors"])
+
+
+def change(browser, task):
+    """The rpm wanted at a flight point, and what to change for it: diameter and pitch of each way."""
+    browser.type("#wanted", task["wanted_rpm"])
+    press(browser, "Work out the changes")
+    ways = "return [...document.querySelectorAll('.change details > summary')].map(way => way.innerText)"
+    size = re.compile(r"Then (.+?)\s*mm across, pitch (.+?)\s*mm")
+    wanted = task["changes_mm"]
+    found = until("the ways to change it", lambda: browser.run(ways))
+    sizes = [size.search(way).groups() for way in found]
+    assert len(sizes) == len(wanted), (found, wanted)
+    assert all(near(*pair) for way in zip(sizes, wanted) for pair in zip(*way)), (sizes, wanted)
+
+
+def hold(browser, task):
+    """Whether the wood holds: the margin at every station."""
+    fold_out(browser, "bench")
+    cells(browser, "Stress by station", 0, task["margins_percent"])
+
+
+def take_away(browser, folder, task):
+    """Every file of the bench, and the report; what stands in them is compared elsewhere."""
+    fold_out(browser, "paper")
+    for label in task["files"]:
+        take(browser, folder, label)
+    fold_out(browser, "report")
+    press(browser, "Make the report")
+    take(browser, folder, "Save the report as PDF")
+
+
+def take(browser, folder, label):
+    """One more whole file is on the disk."""
+    finished = lambda: {file for file in (folder / "downloads").glob("*.*") if file.suffix != ".part"}
+    before = finished()
+    press(browser, label)
+    until(f"the file of {label}", lambda: [file for file in finished() - before if file.stat().st_size > 0])
 
 
 def cells(browser, table, column, wanted):

@@ -20,5 +20,5 @@ def whole(browser, page, folder):
     file.write_bytes(browser.printed(*A4_MM))
     pdf = pymupdf.open(file)
     assert len(pdf) == sheets > 3, (len(pdf), sheets)
-    rulers = [judged(f"page {leaf.number + 1}", leaf, A4_MM) for leaf in pdf]
+    rulers = [judged(f"page {leaf.number + 1}", leaf, A4_MM, by="firefox_") for leaf in pdf]
     print(f"{len(pdf)} sheets printed, rulers {min(rulers):.3f} to {max(rulers):.3f} mm")

@@ -11,6 +11,8 @@ import urllib.request
 from pathlib import Path
 
 PATIENCE_S = 60.0
+# The rules of access take long on a page with everything open.
+SCRIPT_S = 150.0
 ELEMENT = "element-6066-11e4-a52e-4f735466cecf"
 
 
@@ -41,6 +43,7 @@ class WebKit:
             self.end()
             raise
         self.root += "/" + session["sessionId"]
+        self.ask("POST", "/timeouts", {"script": int(1e3 * SCRIPT_S)})
         self.name = "WebKitGTK {browserVersion}".format(**session["capabilities"])
 
     def begin(self, wanted):
@@ -57,7 +60,7 @@ class WebKit:
         data = None if body is None else json.dumps(body).encode()
         request = urllib.request.Request(self.root + path, data, {"Content-Type": "application/json"}, method=method)
         try:
-            with urllib.request.urlopen(request, timeout=PATIENCE_S) as answer:
+            with urllib.request.urlopen(request, timeout=SCRIPT_S + PATIENCE_S) as answer:
                 return json.load(answer)["value"]
         except urllib.error.HTTPError as fault:
             raise AssertionError(f"{path} {str(body)[:300]}: {fault.read().decode()[:600]}") from None

@@ -45,6 +45,7 @@ impl Copy {
             .filter(|f| workspace.join(f).is_file())
             .map(str::to_owned)
             .collect();
+        remove_gone(root, &names)?;
         let (own, others): (Vec<_>, Vec<_>) = names.iter().partition(|name| in_rooms(name, rooms));
         for name in others {
             let mut bytes = fs::read(workspace.join(name))?;
@@ -150,6 +151,19 @@ impl Copy {
         ensure!(built, "the tests of the copy do not build");
         Ok(programs)
     }
+}
+
+/// Takes out what an earlier copy had and the workspace no longer has; notes what is copied now.
+fn remove_gone(root: &Path, names: &[String]) -> Result<()> {
+    let list = root.join("copied.txt");
+    let now: HashSet<&str> = names.iter().map(String::as_str).collect();
+    for gone in fs::read_to_string(&list).unwrap_or_default().lines().filter(|name| !now.contains(name)) {
+        let file = root.join(gone);
+        if file.exists() {
+            fs::remove_file(file)?;
+        }
+    }
+    write(&list, names.join("\n").as_bytes())
 }
 
 fn in_rooms(name: &str, rooms: &[&str]) -> bool {

@@ -55,8 +55,8 @@ fn packages() -> Result<()> {
     anyhow::ensure!(
         may_install(),
         "missing: {}. On Debian run `{line}` as root. Elsewhere install Chromium or Chrome, the \
-         chromedriver of the same version, Firefox, WebKitGTK with its WebKitWebDriver, Xvfb, xdotool, npm and Python 3.11 or later with its venv module, all on \
-         the PATH",
+         chromedriver of the same version, Firefox, WebKitGTK with its WebKitWebDriver, Xvfb, xdotool, npm \
+         and Python 3.11 or later with its venv module, all on the PATH",
         missing.join(", ")
     );
     println!("installing {}", missing.join(", "));

@@ -1,7 +1,7 @@
 //! What the page asked of the network and what it complained of.
 
 use super::{Browser, cdp};
-use anyhow::Result;
+use anyhow::{Result, ensure};
 use serde_json::Value;
 
 /// One line of the browser's console.
@@ -48,6 +48,17 @@ impl Browser {
                 .map(|entry| ConsoleLine { level: text(entry, "level"), text: text(entry, "message") })
                 .collect(),
         })
+    }
+
+    /// The page has asked nobody for anything and has complained of nothing since the logs were last taken.
+    ///
+    /// # Errors
+    /// What it asked for, what it complained of.
+    pub async fn assert_quiet(&self) -> Result<()> {
+        let logs = self.logs().await?;
+        let complaints = logs.complaints();
+        ensure!(logs.requests.is_empty() && complaints.is_empty(), "{:?} {complaints:?}", logs.requests);
+        Ok(())
     }
 }
 

@@ -8,6 +8,7 @@ mod beam_section;
 mod engine;
 mod exact_flow;
 mod fit;
+mod formulas;
 pub mod list;
 mod plots;
 pub mod rotor;
@@ -45,13 +46,14 @@ impl Topic {
 }
 
 const SOLVER: &str = "Section solver";
+const OUTLINE: &str = "Outlines";
 const ROTOR: &str = "Blade elements";
 const TUNNEL: &str = "Whole propeller in the wind tunnel";
 const MACHINE: &str = "Engine and aircraft";
 const WOOD: &str = "Wood and strength";
 
 /// All of them, in the order of the list.
-pub static TOPICS: [Topic; 35] = [
+pub static TOPICS: [Topic; 39] = [
     Topic::new("Air", "validate_air_iso_2533", air::standard),
     Topic::new(SOLVER, "joukowski_lift_is_exact", exact_flow::joukowski_lift),
     Topic::new(SOLVER, "joukowski_speeds_are_exact", exact_flow::joukowski_speeds),
@@ -61,6 +63,10 @@ pub static TOPICS: [Topic; 35] = [
     Topic::new(SOLVER, "validate_similar_flows_falkner_skan", exact_flow::falkner_skan),
     Topic::new(SOLVER, "validate_linear_retardation_howarth", exact_flow::howarth),
     Topic::new(SOLVER, "validate_section_solver_published", section::published),
+    Topic::new(OUTLINE, "the_sixteen_series_has_its_published_ordinates", formulas::sixteen_series),
+    Topic::new(ROTOR, "corrections_are_those_published", formulas::corrections),
+    Topic::new(ROTOR, "stall_delay_is_that_published", formulas::stall_delay),
+    Topic::new(ROTOR, "validate_windmill_brake_buhl", formulas::windmill_brake),
     Topic::new(ROTOR, "whole_propellers_agree", rotor::whole_propellers),
     Topic::new(ROTOR, "single_stations_agree", rotor::single_stations),
     Topic::new(ROTOR, "validate_tip_loss_goldstein", tip_loss::prandtl_by_goldstein),

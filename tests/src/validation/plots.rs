@@ -26,8 +26,8 @@ pub(super) const CAPTIONS: [(&str, &str); 4] = [
     ),
     (
         "validation/eppler-387.svg",
-        "Eppler 387 at Reynolds numbers 60 000 and 200 000: drag over lift, measured (McGhee and others) \
-         as dots, computed as lines",
+        "Eppler 387 at Reynolds numbers 60 000 and 200 000: drag over lift, measured (McGhee and others, \
+         figures from memory, those at 60 000 with low confidence) as dots, computed as lines",
     ),
     (
         "validation/tip-loss.svg",
@@ -98,7 +98,7 @@ fn eppler() -> String {
             let computed = points.iter().map(|p| (p.cl, p.cd)).collect();
             [
                 line(format!("computed, {}", known.0), k, 1.0, computed),
-                dots(format!("NASA TM 4062, {}", known.0), k, known.1.to_vec()),
+                dots(format!("recalled, {}", known.0), k, known.1.to_vec()),
             ]
         });
     chart(SeriesLabelPosition::UpperLeft, ["cl", "cd"], [0.0..1.4, 0.0..0.05], &curves.collect::<Vec<_>>())

@@ -78,9 +78,11 @@ pub(super) fn least_loss() -> Vec<Check> {
 }
 
 const LIGHT: Basis = Basis {
-    source: "S. Goldstein, On the Vortex Theory of Screw Propellers, Proc. Royal Society A 123 (1929), solved anew in `tests/src/goldstein.rs`",
+    source: "S. Goldstein, On the Vortex Theory of Screw Propellers, Proc. Royal Society A 123 (1929), \
+             solved anew in `tests/src/goldstein.rs`",
     mark: Mark::Computed,
-    why: "what the program's table of his factor is held to, 0.001, and as much for a load that is light but not nothing",
+    why: "what the program's table of his factor is held to, 0.001, and as much for a load that is light \
+          but not nothing",
 };
 
 /// The circulation of designs for next to no thrust, over that of a propeller of very many blades:

@@ -99,7 +99,8 @@ const ROWS: &str = "inboard of 0.45 R the share bends more between the table's r
 /// The core's factor at one place.
 fn core_at(exact: &Goldstein, blades: u32, advance: f64, x: f64) -> Check {
     let ends = Ends::new(f64::from(blades), x, 1.0, 0.0, false).exact_at_tip(blades, x);
-    let what = format!("Goldstein's F, {blades} blades, λ {advance}, {x} R");
+    let plural = if blades == 1 { "" } else { "s" };
+    let what = format!("Goldstein's F, {blades} blade{plural}, λ {advance}, {x} R");
     TABLE.within(what, ends.factor(advance / advance.hypot(x)), exact.factor(x), 0.001)
 }
 

@@ -104,7 +104,9 @@ async fn two_blades_of_eight_stations_are_typed_on_a_phone_without_a_mouse() -> 
         let all = async || {
             let job = kept(browser).await?;
             Ok(job.filter(|job| {
-                job.carved.as_ref().is_some_and(|c| c.blades.iter().all(|b| b.readings.len() == MEASURED) && c.blades.len() == 2)
+                job.carved.as_ref().is_some_and(|c| {
+                    c.blades.iter().all(|b| b.readings.len() == MEASURED) && c.blades.len() == 2
+                })
             }))
         };
         let job = browser.wait("sixteen readings kept", all).await?;
@@ -113,8 +115,10 @@ async fn two_blades_of_eight_stations_are_typed_on_a_phone_without_a_mouse() -> 
         for (blade, off) in carved.blades.iter().zip([0.4, -0.3]) {
             for (reading, r) in blade.readings.iter().zip(drawn.station_radii_m()) {
                 let face = drawn.cut(r).angle_rad - drawn.face_to_chord_rad(r).context("no face")?;
-                assert!((reading.angle_deg.context("no angle")? - face.to_degrees() - off).abs() < 0.02, "{reading:?}");
-                assert!((1e3 * (reading.chord_m.context("no chord")? - drawn.cut(r).chord_m) - off).abs() < 0.06, "{reading:?}");
+                let angle_deg = reading.angle_deg.context("no angle")? - face.to_degrees();
+                let chord_mm = 1e3 * (reading.chord_m.context("no chord")? - drawn.cut(r).chord_m);
+                assert!((angle_deg - off).abs() < 0.02, "{reading:?}");
+                assert!((chord_mm - off).abs() < 0.06, "{reading:?}");
                 assert!(reading.thickness_m.is_some() && reading.track_m.is_none());
             }
         }

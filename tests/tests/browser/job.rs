@@ -28,14 +28,6 @@ async fn turn(browser: &Browser) -> Result<Job> {
     Ok(turned)
 }
 
-/// The page has asked nobody for anything and has complained of nothing.
-async fn assert_quiet(browser: &Browser) -> Result<()> {
-    let logs = browser.logs().await?;
-    assert_eq!(logs.requests, Vec::<String>::new());
-    assert!(logs.complaints().is_empty(), "{:?}", logs.complaints());
-    Ok(())
-}
-
 #[tokio::test(flavor = "multi_thread")]
 async fn turning_a_station_changes_its_departure_as_the_core_says_and_undo_brings_it_back() -> Result<()> {
     let before = computed_departures_deg(&example()?, STATION)?;
@@ -53,7 +45,7 @@ async fn turning_a_station_changes_its_departure_as_the_core_says_and_undo_bring
         browser.wait_for_departures_of(&turned()?.0, STATION).await?;
         browser.keys(&format!("{}z{}", char::from(Key::Control), char::from(Key::Null))).await?;
         browser.wait_for_departures_of(&example()?, STATION).await?;
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }
@@ -66,7 +58,7 @@ async fn a_reload_finds_the_job_again() -> Result<()> {
         browser.reload().await?;
         browser.wait_for_departures_of(&job, STATION).await?;
         assert_eq!(browser.angle_box(STATION).await?.value().await?, turned()?.1);
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }
@@ -82,7 +74,7 @@ async fn a_saved_job_opens_in_another_browser() -> Result<()> {
         let text = std::fs::read_to_string(&file)?;
         assert!(Job::from_json(&text)? == job, "the file holds another job: {text}");
         std::fs::copy(&file, &copy)?;
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await?;
     drive("open", async |browser| {
@@ -90,7 +82,7 @@ async fn a_saved_job_opens_in_another_browser() -> Result<()> {
         browser.wait_for_departures_of(&example()?, STATION).await?;
         browser.choose_file(&copy).await?;
         browser.wait_for_departures_of(&turned()?.0, STATION).await?;
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }
@@ -103,7 +95,7 @@ async fn on_a_narrow_screen_the_same_is_behind_the_menu() -> Result<()> {
         browser.control_starting("button", "Menu").await?.click().await?;
         let file = browser.download(async || browser.press("Save").await).await?;
         assert!(Job::from_json(&std::fs::read_to_string(file)?)? == example()?);
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }
@@ -117,7 +109,7 @@ async fn save_page(copy: &Path) -> Result<()> {
         let file = browser.download(async || browser.press("Save page with job").await).await?;
         assert_eq!(file.extension().and_then(|extension| extension.to_str()), Some("html"));
         std::fs::copy(&file, copy)?;
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }
@@ -136,7 +128,7 @@ async fn the_page_saved_with_a_job_inside_opens_with_it_and_saves_on() -> Result
         // A copy of the copy is the copy: nothing is lost or added on the way.
         let again = browser.download(async || browser.press("Save page with job").await).await?;
         assert!(std::fs::read(again)? == std::fs::read(&copy)?, "the copy of the copy differs");
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }
@@ -195,7 +187,7 @@ async fn a_list_shows_what_was_picked_and_what_undo_brings_back() -> Result<()> 
         browser.wait("the flat face", async || Ok((shown().await? == "flat face").then_some(()))).await?;
         browser.control_starting("button", "Undo: what angles are measured to").await?.click().await?;
         browser.wait("the chord line", async || Ok((shown().await? == "chord line").then_some(()))).await?;
-        assert_quiet(browser).await
+        browser.assert_quiet().await
     })
     .await
 }

@@ -23,10 +23,7 @@ async fn save(desktop: &Desktop, name: &str) -> Result<PathBuf> {
 /// The page stands there once, quietly.
 async fn assert_in_order(browser: &Browser) -> Result<()> {
     assert_eq!(browser.run("return document.querySelectorAll('h1').length").await?, 1, "drawn twice");
-    let logs = browser.logs().await?;
-    assert_eq!(logs.requests, Vec::<String>::new());
-    assert!(logs.complaints().is_empty(), "{:?}", logs.complaints());
-    Ok(())
+    browser.assert_quiet().await
 }
 
 #[tokio::test(flavor = "multi_thread")]

@@ -19,10 +19,7 @@ async fn the_page_starts_from_disk_without_network_or_complaint() -> Result<()> 
         println!("started in {started_ms:.0} ms");
         assert!(started_ms <= LONGEST_START_MS, "started in {started_ms} ms");
         browser.wait_for_text("Spokeshave").await?;
-        let logs = browser.logs().await?;
-        assert_eq!(logs.requests, Vec::<String>::new());
-        assert!(logs.complaints().is_empty(), "{:?}", logs.complaints());
-        Ok(())
+        browser.assert_quiet().await
     })
     .await
 }

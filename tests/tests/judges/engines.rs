@@ -6,15 +6,19 @@ use std::path::Path;
 use anyhow::{Context, Result};
 use serde_json::{Value, json};
 use spokeshave::carved;
+use spokeshave::change::{Wanted, changes};
 use spokeshave::job::{
-    Aircraft, AngleReference, BladeReading, Carved, CarvedBlade, DEMOS, Engine, Job, LogReading, Logbook,
+    Aircraft, AngleReference, BladeReading, Carved, CarvedBlade, DEMOS, Engine, Figure, Job, LogReading,
+    Logbook,
 };
 use spokeshave::logbook;
 use spokeshave::rig::Rig;
 use spokeshave::shape::twist;
+use spokeshave::wood::strength;
 use spokeshave_tests::browser::{built_page, target_folder};
 use spokeshave_tests::judge::ask;
 use spokeshave_tests::page::{computed_departures_deg, example, with_angle};
+use spokeshave_tests::taken::{FILES, SHEETS, same_files};
 use spokeshave_tests::tools::axe_script;
 
 /// The station that is turned, from 1 at the hub, and by how much, degrees.
@@ -33,6 +37,8 @@ const STANDING: usize = 0;
 /// Stations measured on each blade, and how far its angles lie off the drawing, degrees.
 const MEASURED: usize = 3;
 const OFF_DEG: [f64; 2] = [0.4, -0.3];
+/// How much faster it is wanted to turn standing, rpm.
+const WANTED_RPM: f64 = 40.0;
 /// How far figures kept by the page may be off those of the core: another processor's elementary functions.
 const SAME: f64 = 1e-6;
 
@@ -112,11 +118,23 @@ fn task() -> Result<(Value, Job)> {
         blade.stations.iter().map(|s| s.angle_deg.from_drawn).collect::<Vec<_>>()
     };
     let (whole, rpm) = logged(&carved)?;
-    let told = logbook::estimate(&Rig::new(&whole)?)?;
+    let whole_rig = Rig::new(&whole)?;
+    let told = logbook::estimate(&whole_rig)?;
+    let known = Rig::with_factors(&whole, &told.estimate.factors)?;
+    let standing = known.point(STANDING).and_then(|p| p.rpm).context("no rpm standing")?;
+    let wanted_rpm = (standing + WANTED_RPM).round();
+    let wanted = Wanted { point: STANDING, figure: Figure::Rpm, value: wanted_rpm };
+    let changes = changes(&known, &wanted)?;
+    let margins = strength(&whole_rig)?.stations.into_iter().map(|s| s.margin.map(|m| 100.0 * m));
     let task = json!({
-        "station": STATION, "drawn": figures(&drawn, STATION)?, "edits": edits, "twisted": figures(&twisted, STATION)?,
+        "station": STATION, "drawn": figures(&drawn, STATION)?, "edits": edits,
+        "twisted": figures(&twisted, STATION)?,
         "faces": faces, "from_drawn": differences.blades.iter().map(from_drawn).collect::<Vec<_>>(),
         "log_rpm": rpm, "factors": told.estimate.found.iter().map(|f| f.value).collect::<Vec<_>>(),
+        "wanted_rpm": wanted_rpm.to_string(),
+        "changes_mm": changes.iter().filter(|c| !c.is_in_vain()).map(|c| [1e3 * c.diameter_m, 1e3 * c.pitch_m]).collect::<Vec<_>>(),
+        "margins_percent": margins.collect::<Vec<_>>(),
+        "files": FILES.map(|f| f.0).into_iter().chain([SHEETS]).collect::<Vec<_>>(),
         "diameter_m": whole.propeller.diameter_m, "title": whole.title,
         "about": listed(DEMOS[0].about),
     });
@@ -177,7 +195,11 @@ fn the_page_holds_in(engine: &str) -> Result<()> {
     print!("{}", ask("engines.py", &[engine, file.to_str().context("a plain path")?])?);
     let file = folder.path().join("saved.json");
     // Where the environment leaves the job out, nothing is saved.
-    if std::env::var("SPOKESHAVE_ENGINES").is_ok() && !file.exists() { Ok(()) } else { saved(&file, &whole) }
+    if std::env::var("SPOKESHAVE_ENGINES").is_ok() && !file.exists() {
+        return Ok(());
+    }
+    saved(&file, &whole)?;
+    same_files(&folder.path().join("downloads"), &whole, CRUISE)
 }
 
 #[test]

@@ -55,7 +55,8 @@ pub fn DragCurve(props: &DragCurveProps) -> Html {
         <figure class="drag-curve">
             <figcaption><b>{ &props.title }</b><span>{ format!(", {}", props.what) }</span></figcaption>
             <div ref={node}>
-                <svg width={px(width)} height={px(props.height)} viewBox={format!("0 0 {} {}", px(width), px(props.height))}
+                <svg width={px(width)} height={px(props.height)}
+                    viewBox={format!("0 0 {} {}", px(width), px(props.height))}
                     role="group" aria-label={format!("{} over radius; each ring can be moved", props.title)}>
                     { axes(&frame, unit, props.length) }
                     { best(&frame, &props.best) }
@@ -74,7 +75,8 @@ fn axes(frame: &Frame, unit: Unit, length: Unit) -> Html {
     html! {
         <g aria-hidden="true">
             { rows(&up, frame.left, frame.right) }
-            <rect class="frame" x={px(frame.left)} y={px(frame.top)} width={px(frame.right - frame.left)} height={px(frame.low - frame.top)} />
+            <rect class="frame" x={px(frame.left)} y={px(frame.top)} width={px(frame.right - frame.left)}
+                height={px(frame.low - frame.top)} />
             { left(&up, frame.left) }
             { bottom(&along, frame.low) }
             <text class="axis-figure" x={px(frame.right)} y={px(frame.low + 31.0)} text-anchor="end">
@@ -96,7 +98,9 @@ fn best(frame: &Frame, best: &Best) -> Html {
         <g aria-hidden="true">
             <path class="working-band" d={polygon(band)} />
             <path class="curve is-dashed" d={polyline(line)} />
-            <text class="haloed quiet" x={px(frame.right - 6.0)} y={px(frame.top + 16.0)} text-anchor="end">{ &best.name }</text>
+            <text class="haloed quiet" x={px(frame.right - 6.0)} y={px(frame.top + 16.0)} text-anchor="end">
+                { &best.name }
+            </text>
         </g>
     }
 }
@@ -123,7 +127,10 @@ fn curve(frame: &Frame, line: &Line, i: usize, selected_m: f64) -> Html {
     html! {
         <g aria-hidden="true">
             <path class="curve" d={path} />
-            <text class="haloed strong" x={px(frame.x.px(at[0]) + off[0])} y={px(frame.y.px(at[1]) + off[1])} text-anchor={anchor}>{ line.name }</text>
+            <text class="haloed strong" x={px(frame.x.px(at[0]) + off[0])} y={px(frame.y.px(at[1]) + off[1])}
+                text-anchor={anchor}>
+                { line.name }
+            </text>
         </g>
     }
 }
@@ -134,7 +141,8 @@ fn rings(props: &DragCurveProps, frame: &Frame, hand: &Hand, measure: Measure, a
         let place = [frame.x.px(radius), frame.y.px(frame.y.held(value))];
         let figure = fixed(unit.of(value), unit.decimals.max(1));
         html! {
-            <Ring key={i} station={i} count={at.len()} {measure} {value} {place} chosen={i == props.selected} hand={hand.clone()}
+            <Ring key={i} station={i} count={at.len()} {measure} {value} {place} chosen={i == props.selected}
+                hand={hand.clone()}
                 shown={unit.of(value)} {figure} unit={unit.name} />
         }
     };

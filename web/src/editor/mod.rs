@@ -14,12 +14,12 @@ use spokeshave::drawn::DrawnStation;
 use spokeshave::result::PointResult;
 use yew::prelude::*;
 
-use crate::app::{Compared, RigRef};
+use crate::act::{Seen, use_act};
+use crate::form::Pick;
 use crate::number::fixed;
+use crate::results::{Compared, RigRef};
 use crate::state::{Action, Measure};
 use crate::units::{Quantity, Units};
-use crate::view::form::Pick;
-use crate::view::{Seen, use_act};
 use curve::DragCurve;
 use frame::Spans;
 use lines::{Best, Line, best_angles, chord, thickness, twist};
@@ -63,9 +63,11 @@ pub fn Curves(props: &CurvesProps) -> Html {
     };
     html! {
         <div class="curves">
-            <DragCurve title="Blade angle" what="degrees to the chord line" measures={ANGLE} lines={vec![twist(blade)]} {best} ghosts={ghosts(&[twist])}
+            <DragCurve title="Blade angle" what="degrees to the chord line" measures={ANGLE}
+                lines={vec![twist(blade)]} {best} ghosts={ghosts(&[twist])}
                 rings={rings(&props.drawn, ANGLE)} spans={now[0]} {length} selected={state.station} height={196.0} />
-            <DragCurve title="Chord and thickness" what={length.name} measures={WOOD} lines={vec![chord(blade), thickness(blade)]} ghosts={ghosts(&[chord, thickness])}
+            <DragCurve title="Chord and thickness" what={length.name} measures={WOOD}
+                lines={vec![chord(blade), thickness(blade)]} ghosts={ghosts(&[chord, thickness])}
                 rings={rings(&props.drawn, WOOD)} spans={now[1]} {length} selected={state.station} height={176.0} />
             <Follow span={state.follow} units={state.units} />
         </div>
@@ -109,9 +111,14 @@ fn Follow(props: &FollowProps) -> Html {
     let options: Vec<AttrValue> = (0..=5).map(|n| words(n).into()).collect();
     html! {
         <div class="follow">
-            <Pick label="Neighbours that follow" {options} picked={Some(props.span)} onpick={act.on(Action::Follow)} />
+            <Pick label="Neighbours that follow" {options} picked={Some(props.span)}
+                onpick={act.on(Action::Follow)} />
             <p class="note">
-                { format!("Drag a ring, or press ↑ ↓ on it: 0.1° or {}, with Shift ten times finer. ← → go to the next ring, Esc puts it back.", step_words) }
+                { format!(
+                    "Drag a ring, or press ↑ ↓ on it: 0.1° or {}, with Shift ten times finer. ← → go to the \
+                     next ring, Esc puts it back.",
+                    step_words
+                ) }
             </p>
         </div>
     }

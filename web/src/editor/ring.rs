@@ -8,11 +8,11 @@ use web_sys::Element;
 use yew::prelude::*;
 
 use super::pull::{Pull, pressed};
+use crate::act::{Act, use_act};
 use crate::chart::axis::px;
+use crate::form::capital;
 use crate::number::plain;
 use crate::state::{Action, Held, Measure};
-use crate::view::form::capital;
-use crate::view::{Act, use_act};
 
 /// What the rings of one curve have in common.
 #[derive(Clone, Debug)]
@@ -62,17 +62,21 @@ pub fn Ring(props: &RingProps) -> Html {
     let chosen = props.chosen;
     let degrees = if props.measure == Measure::Angle { "°" } else { "" };
     html! {
-        <g class={classes!("ring", chosen.then_some("is-chosen"))} role="slider" tabindex={if chosen { "0" } else { "-1" }}
+        <g class={classes!("ring", chosen.then_some("is-chosen"))} role="slider"
+            tabindex={if chosen { "0" } else { "-1" }}
             aria-label={format!("{} at station {}", capital(props.measure.name()), props.station + 1)}
             aria-orientation="vertical" aria-valuenow={plain(props.shown, 2).replace('\u{2212}', "-")}
             aria-valuetext={format!("{} {}", props.figure, props.unit)}
-            onpointerdown={taken(props, &act)} onpointermove={moved(props, &act)} onpointerup={released(props, &act, Action::LetGo)}
+            onpointerdown={taken(props, &act)} onpointermove={moved(props, &act)}
+            onpointerup={released(props, &act, Action::LetGo)}
             onpointercancel={released(props, &act, Action::PutBack)} onkeydown={keys(props, &act)}
             onblur={act.on(|_: FocusEvent| Action::EndRun)}>
             <circle class="ring-reach" cx={px(x)} cy={px(y)} r="14" />
             <circle class="ring-mark" cx={px(x)} cy={px(y)} r="5" />
             if chosen {
-                <text class="haloed strong" x={px(x)} y={px(y - 10.0)} text-anchor="middle">{ format!("{}{degrees}", props.figure) }</text>
+                <text class="haloed strong" x={px(x)} y={px(y - 10.0)} text-anchor="middle">
+                    { format!("{}{degrees}", props.figure) }
+                </text>
             }
         </g>
     }

@@ -1,6 +1,5 @@
 //! The reducer: aircraft and engine, their figures, kinds and rows.
 
-use spokeshave::aircraft::induced_factor;
 use spokeshave::job::{Aircraft, AltitudeLaw, Engine};
 
 use super::*;
@@ -101,7 +100,7 @@ fn an_empty_box_takes_out_only_what_a_job_may_go_without() {
 #[test]
 fn drag_given_another_way_is_the_same_drag() {
     let factor = |s: &State| match &s.job().aircraft {
-        Some(Aircraft::Aeroplane(a)) => induced_factor(&a.drag),
+        Some(Aircraft::Aeroplane(a)) => a.drag.induced_factor(),
         _ => 0.0,
     };
     let by_ratio = chosen(&start(), Choice::Aircraft(AircraftChoice::DragBy(DragBy::AspectRatio)));

@@ -19,9 +19,10 @@ pub fn fit() -> Html {
     html! {
         <aside class="caution" aria-label="Before you act on the fit">
             <b>{ "Before you act. " }</b>
-            { "These are estimates for still air, one mass and an engine in good order. Leave margin on take-off, climb, range and \
-               rpm, and prove them step by step. Keep out of the disc plane on the ground. The flight manual, the engine maker's \
-               limits and your aviation authority's rules come before any figure here." }
+            { "These are estimates for still air, one mass and an engine in good order. Leave margin on \
+               take-off, climb, range and rpm, and prove them step by step. Keep out of the disc plane on \
+               the ground. The flight manual, the engine maker's limits and your aviation authority's rules \
+               come before any figure here." }
         </aside>
     }
 }
@@ -31,9 +32,10 @@ pub fn shape() -> Html {
     html! {
         <aside class="caution" aria-label="Before you act on a shaped blade">
             <b>{ "Before you act. " }</b>
-            { "What is shaped here is judged by the air alone, unless the job names its wood and a stress margin is asked for. A blade that comes \
-               out thinner or narrower than a proven one needs its own check of strength (the Bench panel, steady load only), flutter and \
-               balance, and a licensed inspector's or engineer's word where the rules ask for it." }
+            { "What is shaped here is judged by the air alone, unless the job names its wood and a stress \
+               margin is asked for. A blade that comes out thinner or narrower than a proven one needs its \
+               own check of strength (the Bench panel, steady load only), flutter and balance, and a \
+               licensed inspector's or engineer's word where the rules ask for it." }
         </aside>
     }
 }
@@ -53,16 +55,21 @@ pub fn logbook() -> Html {
     html! {
         <aside class="caution" aria-label="Before you act on the logbook">
             <b>{ "Before you act. " }</b>
-            { "Tie the aircraft down for ground runs, chock it, and keep everybody out of the disc plane. In flight look out first and let a second \
-               person write. A blade that was planed is inspected and balanced before it runs again, first at low rpm. The engine maker's limits, the \
-               flight manual and your aviation authority's rules come before any figure here." }
+            { "Tie the aircraft down for ground runs, chock it, and keep everybody out of the disc plane. \
+               In flight look out first and let a second person write. A blade that was planed is inspected \
+               and balanced before it runs again, first at low rpm. The engine maker's limits, the flight \
+               manual and your aviation authority's rules come before any figure here." }
         </aside>
     }
 }
 
 /// Before wood is cut by what stands on paper.
 pub fn paper(job: &Job) -> Html {
-    html! { <aside class="caution" aria-label="Before you act on paper"><b>{ "Before you act. " }</b>{ cautions(job).join(" ") }</aside> }
+    html! {
+        <aside class="caution" aria-label="Before you act on paper">
+            <b>{ "Before you act. " }</b>{ cautions(job).join(" ") }
+        </aside>
+    }
 }
 
 /// At the foot of the page.
@@ -70,9 +77,10 @@ pub fn foot() -> Html {
     html! {
         <p>
             <b>{ "Estimates, not an approval. " }</b>
-            { "Leave margin and test. Materials vary: inspect, proof-load and balance every blade, and check hub bolts again as \
-               the wood moves. Nobody stands in the plane of the disc. The rules of your aviation authority, the engine \
-               maker's limits and a licensed inspector or engineer come first." }
+            { "Leave margin and test. Materials vary: inspect, proof-load and balance every blade, and \
+               check hub bolts again as the wood moves. Nobody stands in the plane of the disc. The rules \
+               of your aviation authority, the engine maker's limits and a licensed inspector or engineer \
+               come first." }
         </p>
     }
 }

@@ -8,7 +8,7 @@ use wasm_bindgen::JsCast;
 use web_sys::{HtmlElement, js_sys};
 use yew::prelude::*;
 
-use super::{Seen, use_act};
+use crate::act::{Seen, use_act};
 use crate::number::with_unit;
 use crate::state::Action;
 use crate::units::{Quantity, Units};

@@ -94,7 +94,8 @@ fn thrust_and_power(props: &CoefficientsProps, point: &PointResult) -> Html {
     points.extend(mark(f.advance_ratio, f.cp, 4));
     let y = Axis { words: "coefficient".into(), unit: Unit::ratio(4), span: None };
     html! {
-        <LineChart title="Thrust and power coefficients" x={advance()} {y} {series} {points} uprights={upright(point, f.advance_ratio)} />
+        <LineChart title="Thrust and power coefficients" x={advance()} {y} {series} {points}
+            uprights={upright(point, f.advance_ratio)} />
     }
 }
 

@@ -57,7 +57,8 @@ pub fn Drop(props: &DropProps) -> Html {
     };
     html! {
         <div class={classes!("drop", props.class.clone())} ref={whole} {onkeydown} {onfocusout}>
-            <button type="button" class="drop-button" ref={button} onclick={toggle} aria-expanded={if *open { "true" } else { "false" }}>
+            <button type="button" class="drop-button" ref={button} onclick={toggle}
+                aria-expanded={if *open { "true" } else { "false" }}>
                 { &props.label }
             </button>
             <div class="drop-sheet" hidden={!*open} tabindex="-1" {onclick}>{ props.children.clone() }</div>

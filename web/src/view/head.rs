@@ -6,11 +6,11 @@ use web_sys::HtmlInputElement;
 use yew::prelude::*;
 
 use super::drop::Drop;
-use super::form::{Entry, Message, Shown};
 use super::mark::{bend, halves, mark};
 use super::units::UnitPicks;
-use super::{Act, Seen, use_act};
+use crate::act::{Act, Seen, use_act};
 use crate::effect::file;
+use crate::form::{Entry, Message, Shown};
 use crate::saved_page;
 use crate::state::{Action, Draft, Field, Notice, Theme};
 use crate::units::LengthUnit;
@@ -88,7 +88,8 @@ fn Steps(props: &StepsProps) -> Html {
         let text = name.as_ref().map_or_else(|| format!("{word}: nothing"), |n| format!("{word}: {n}"));
         let onclick = act.on(move |_: MouseEvent| action.clone());
         html! {
-            <button type="button" class="icon" title={text.clone()} aria-label={text} disabled={name.is_none()} {onclick}>
+            <button type="button" class="icon" title={text.clone()} aria-label={text}
+                disabled={name.is_none()} {onclick}>
                 { bend(forward) }
             </button>
         }
@@ -114,7 +115,11 @@ fn LengthSwitch(props: &StateProps) -> Html {
     let choices = LengthUnit::ALL.iter().map(|&length| {
         let onclick = act.on(move |_: MouseEvent| Action::Units(crate::units::Units { length, ..units }));
         let on = units.length == length;
-        html! { <button type="button" aria-pressed={if on { "true" } else { "false" }} {onclick}>{ length.symbol() }</button> }
+        html! {
+            <button type="button" aria-pressed={if on { "true" } else { "false" }} {onclick}>
+                { length.symbol() }
+            </button>
+        }
     });
     html! { <div class="segments" role="group" aria-label="Unit of lengths">{ for choices }</div> }
 }
@@ -126,7 +131,7 @@ fn Jobs() -> Html {
     let examples = DEMOS.iter().enumerate().map(|(i, demo)| {
         html! {
             <button type="button" class="row" onclick={act.on(move |_: MouseEvent| Action::Demo(i))}>
-                { super::form::capital(demo.about) }
+                { crate::form::capital(demo.about) }
             </button>
         }
     });
@@ -135,7 +140,10 @@ fn Jobs() -> Html {
             <button type="button" class="row" onclick={act.on(|_: MouseEvent| Action::Blank)}>
                 { "New: a plain two-blade propeller of one pitch" }
             </button>
-            <p class="note">{ "Examples. Aircraft, engines and figures in them are invented. The job on the page can be had back with Undo." }</p>
+            <p class="note">
+                { "Examples. Aircraft, engines and figures in them are invented. The job on the page can be \
+                   had back with Undo." }
+            </p>
             { for examples }
         </div>
     }
@@ -169,8 +177,12 @@ fn Files(props: &StateProps) -> Html {
                 aria-label="Job file to open" />
             <button type="button" class="plain-button" onclick={open}>{ "Open" }</button>
             <button type="button" class="plain-button" onclick={save(&act, &props.state)}>{ "Save" }</button>
-            <button type="button" class="plain-button" onclick={save_page(&act, &props.state)}>{ "Save page with job" }</button>
-            <button type="button" class="plain-button" onclick={Callback::from(|_: MouseEvent| print())}>{ "Print" }</button>
+            <button type="button" class="plain-button" onclick={save_page(&act, &props.state)}>
+                { "Save page with job" }
+            </button>
+            <button type="button" class="plain-button" onclick={Callback::from(|_: MouseEvent| print())}>
+                { "Print" }
+            </button>
         </>
     }
 }

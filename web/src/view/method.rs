@@ -8,11 +8,11 @@ use spokeshave::result::{Note, PointResult, State};
 use spokeshave::section::Family;
 use yew::prelude::*;
 
-use super::form::{Labelled, Pick, Shown, Switch};
 use super::trust::trust;
-use super::{Act, Seen, use_act};
-use crate::app::RigRef;
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Labelled, Pick, Shown, Switch};
 use crate::number::{fixed, significant};
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Field, Running};
 
 /// Properties of [`MethodPanel`].
@@ -36,9 +36,10 @@ pub fn MethodPanel(props: &MethodPanelProps) -> Html {
             <div>
                 <h3>{ "Method" }</h3>
                 <p class="note">
-                    { "Blade-element momentum with losses at tip and hub, solved for every element by bracketing. \
-                       It leaves out yawed flow, blade sweep, bending and twist under load, and how one blade's wake meets \
-                       the fuselage. Air is the ISO standard atmosphere with an offset." }
+                    { "Blade-element momentum with losses at tip and hub, solved for every element by \
+                       bracketing. It leaves out yawed flow, blade sweep, bending and twist under load, and \
+                       how one blade's wake meets the fuselage. Air is the ISO standard atmosphere with an \
+                       offset." }
                 </p>
                 <Switches state={props.state.clone()} />
             </div>
@@ -142,7 +143,11 @@ fn Outside(props: &OutsideProps) -> Html {
             none if none.is_empty() => " – between stations".into(),
             some => format!(" – at station {some}"),
         };
-        html! { <li class={(note == Note::NoBalance).then_some("bad")}>{ format!("{}{place}", super::form::capital(note.words())) }</li> }
+        html! {
+            <li class={(note == Note::NoBalance).then_some("bad")}>
+                { format!("{}{place}", crate::form::capital(note.words())) }
+            </li>
+        }
     });
     html! {
         <>

@@ -2,7 +2,7 @@
 
 use yew::prelude::*;
 
-use super::use_act;
+use crate::act::use_act;
 use crate::state::{Action, Notice};
 
 /// Properties of [`Said`].
@@ -23,7 +23,9 @@ pub fn Said(props: &SaidProps) -> Html {
                 <b>{ &props.notice.title }</b>
                 <ul>{ for lines }</ul>
             </div>
-            <button type="button" class="plain-button" onclick={act.on(|_: MouseEvent| Action::Dismiss)}>{ "Close" }</button>
+            <button type="button" class="plain-button" onclick={act.on(|_: MouseEvent| Action::Dismiss)}>
+                { "Close" }
+            </button>
         </section>
     }
 }

@@ -8,6 +8,7 @@ use yew::prelude::*;
 use super::bench::{self, BenchPanel};
 use super::blade::{BladeSettings, StationTable, in_a_line};
 use super::carved::{self, CarvedPanel};
+use super::caution;
 use super::coefficients::{self, Coefficients};
 use super::fit::{self, FitPanel};
 use super::head::Head;
@@ -27,11 +28,11 @@ use super::shape::{self, ShapePanel};
 use super::steps::Steps;
 use super::verdict::{Against, Verdict};
 use super::workshop::{self, Workshop};
-use super::{Seen, caution, use_act};
-use crate::app::{Later, Now};
+use crate::act::{Seen, use_act};
 use crate::chart::hatch::Hatches;
 use crate::editor::Curves;
 use crate::number::{NO_FIGURE, fixed};
+use crate::results::{Later, Now};
 use crate::state::{Action, Part, State};
 
 /// Properties of [`Page`].
@@ -57,7 +58,10 @@ pub fn Page(props: &PageProps) -> Html {
             if let Some(notice) = &state.notice { <Said notice={notice.clone()} /> }
             <main>
                 if narrow { <Lying ..props.clone() /> }
-                if let Some(result) = &*now.point { <Verdict result={result.clone()} units={state.units} against={against(props)} margins={props.later.margins.clone()} beside={now.beside.clone()} /> }
+                if let Some(result) = &*now.point {
+                    <Verdict result={result.clone()} units={state.units} against={against(props)}
+                        margins={props.later.margins.clone()} beside={now.beside.clone()} />
+                }
                 <div class="sheet" style={format!("--chip-rows: {}", chip_rows(props))}>
                     if !narrow { <Standing ..props.clone() /> }
                     <div class="work">
@@ -111,14 +115,18 @@ fn Panels(props: &PageProps) -> Html {
                 <BladeSettings state={state.part(same_settings)} />
                 <div class="blade-grid">
                     <div class="blade-table">
-                        <StationTable state={state.part(same_table)} drawn={now.drawn.clone()} point={now.point.clone()} points={later.points.clone()} beside={now.beside.clone()} />
+                        <StationTable state={state.part(same_table)} drawn={now.drawn.clone()}
+                            point={now.point.clone()} points={later.points.clone()} beside={now.beside.clone()} />
                     </div>
-                    <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()} rig={now.rig.clone()} beside={now.beside.clone()} />
+                    <Curves state={state.clone()} drawn={now.drawn.clone()} point={now.point.clone()}
+                        rig={now.rig.clone()} beside={now.beside.clone()} />
                 </div>
             </Panel>
-            <Panel id="fit" number={5} title="Fit" open={*open} onunfold={act.on(|open| Action::Unfold(Part::Fit, open))}
+            <Panel id="fit" number={5} title="Fit" open={*open}
+                onunfold={act.on(|open| Action::Unfold(Part::Fit, open))}
                 result={fit::in_a_line(state, later.envelope.as_ref().and_then(|e| e.as_ref().as_ref()))}>
-                <FitPanel state={state.part(fit::same_fit)} envelope={later.envelope.clone()} points={later.points.clone()} limit_rpm={limit_rpm(later)}
+                <FitPanel state={state.part(fit::same_fit)} envelope={later.envelope.clone()}
+                    points={later.points.clone()} limit_rpm={limit_rpm(later)}
                     take_off={later.take_off} ceilings={later.ceilings} worth={later.worth.clone()} />
             </Panel>
             <Panel id="shape" number={6} title="Shape" result={shape::in_a_line(state)} open={*open}>
@@ -131,23 +139,29 @@ fn Panels(props: &PageProps) -> Html {
             <Panel id="sections" number={8} title="Sections" result={sections::in_a_line(state)} open={*open}>
                 <Sections state={state.part(sections::same)} rig={later.rig.clone()} points={later.points.clone()} />
             </Panel>
-            <Panel id="bench" number={9} title="Bench" open={*open} onunfold={act.on(|open| Action::Unfold(Part::Bench, open))}
+            <Panel id="bench" number={9} title="Bench" open={*open}
+                onunfold={act.on(|open| Action::Unfold(Part::Bench, open))}
                 result={bench::in_a_line(state, later.strength.as_deref())}>
                 <BenchPanel state={state.part(bench::same_bench)} strength={later.strength.clone()} />
             </Panel>
             <Workshop number={10} rig={later.rig.clone()} state={state.part(workshop::same_making)} />
-            <Panel id="carved" number={11} title="As carved" open=false onunfold={act.on(|open| Action::Unfold(Part::Carved, open))}
+            <Panel id="carved" number={11} title="As carved" open=false
+                onunfold={act.on(|open| Action::Unfold(Part::Carved, open))}
                 result={carved::in_a_line(state, later.carved.as_deref())}>
-                <CarvedPanel state={state.part(carved::same_carved)} found={later.carved.clone()} rig={later.rig.clone()} />
+                <CarvedPanel state={state.part(carved::same_carved)} found={later.carved.clone()}
+                    rig={later.rig.clone()} />
             </Panel>
-            <Panel id="logbook" number={12} title="Logbook" open=false onunfold={act.on(|open| Action::Unfold(Part::Logbook, open))}
+            <Panel id="logbook" number={12} title="Logbook" open=false
+                onunfold={act.on(|open| Action::Unfold(Part::Logbook, open))}
                 result={logbook::in_a_line(state)}>
-                <LogbookPanel state={state.part(logbook::same_logbook)} logged={later.logged.clone()} rig={later.rig.clone()} />
+                <LogbookPanel state={state.part(logbook::same_logbook)} logged={later.logged.clone()}
+                    rig={later.rig.clone()} />
             </Panel>
             <Panel id="method" number={13} title="How it is computed" result={method_line(props)} open={*open}>
                 <MethodPanel state={state.part(same_method)} rig={later.rig.clone()} point={later.selected()} />
             </Panel>
-            <Panel id="report" number={14} title="Report" open=false result="the whole job as pages to print or to save as PDF">
+            <Panel id="report" number={14} title="Report" open=false
+                result="the whole job as pages to print or to save as PDF">
                 <ReportPanel rig={later.rig.clone()} units={state.units} point={state.point} />
             </Panel>
         </>

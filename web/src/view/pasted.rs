@@ -56,12 +56,15 @@ pub fn Pasted(props: &PastedProps) -> Html {
     };
     html! {
         <>
-            <Sheet id={props.id.clone()} label={props.label.clone()} text={draft.text.clone()} hint={props.hint.clone()}
+            <Sheet id={props.id.clone()} label={props.label.clone()} text={draft.text.clone()}
+                hint={props.hint.clone()}
                 message={draft.message.clone()} {on} />
             <p class="buttons">
                 <Opener label={format!("Open a file of {}", props.label.to_lowercase())}
                     accept=".csv,.txt,.tsv,text/csv,text/plain" most_bytes={props.most_bytes} on={open} />
-                <button type="button" class="act" onclick={take}>{ format!("Take over the {}", props.label.to_lowercase()) }</button>
+                <button type="button" class="act" onclick={take}>
+                    { format!("Take over the {}", props.label.to_lowercase()) }
+                </button>
             </p>
             <p class="said" role="status">{ draft.said.clone() }</p>
         </>

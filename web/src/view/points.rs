@@ -6,8 +6,9 @@ use spokeshave::job::{Aircraft, FlightPoint};
 use spokeshave::result::{PointResult, State as Answer};
 use yew::prelude::*;
 
-use super::form::{Entry, Message, Pick, Shown};
-use super::{Seen, caution, use_act};
+use super::caution;
+use crate::act::{Seen, use_act};
+use crate::form::{Entry, Message, Pick, Shown};
 use crate::number::{figure, fixed_or_none};
 use crate::state::{Action, Choice, Field, PointFigure, Running, SettingKind};
 use crate::units::{Quantity, Units};
@@ -28,7 +29,10 @@ pub fn Points(props: &PointsProps) -> Html {
     let (state, job) = (&props.state, props.state.job());
     let selected = state.point;
     let rows = (0..job.flight_points.len()).map(|i| {
-        html! { <PointRow key={i} index={i} state={state.clone()} result={props.results.get(i).cloned().unwrap_or_default()} /> }
+        html! {
+            <PointRow key={i} index={i} state={state.clone()}
+                result={props.results.get(i).cloned().unwrap_or_default()} />
+        }
     });
     let rest = job.flight_points.get(selected).is_some_and(|p| p.airspeed_m_s == Some(0.0));
     let add = act.on(move |_: MouseEvent| Action::Choose(Choice::AddPoint(selected), Running::default()));
@@ -72,7 +76,11 @@ fn PointsHead(props: &PointsHeadProps) -> Html {
     let cells =
         columns.iter().map(|(name, unit)| html! { <th scope="col">{ name }<small>{ unit }</small></th> });
     html! {
-        <thead><tr><th scope="col">{ "Flight point" }</th>{ for cells }<th><span class="unseen">{ "Remove" }</span></th></tr></thead>
+        <thead>
+            <tr>
+                <th scope="col">{ "Flight point" }</th>{ for cells }<th><span class="unseen">{ "Remove" }</span></th>
+            </tr>
+        </thead>
     }
 }
 
@@ -108,12 +116,16 @@ fn PointRow(props: &PointRowProps) -> Html {
             <tr class={classes!((i == state.point).then_some("selected"))}>
                 <th scope="row"><Entry shown={boxes[0].clone()} is_text=true class="name" /></th>
                 { for boxes[1..3].iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
-                <td><Entry shown={boxes[3].clone()} hint={top_speed(state.units, props.result.as_ref().as_ref())} /></td>
+                <td>
+                    <Entry shown={boxes[3].clone()} hint={top_speed(state.units, props.result.as_ref().as_ref())} />
+                </td>
                 <td><SettingPick index={i} point={point.clone()} {hovers} result={props.result.clone()} /></td>
                 <td class="setting">{ setting_box(point, &boxes[4]) }</td>
                 <PointAnswer result={props.result.clone()} units={state.units} />
                 <td>
-                    <button type="button" class="icon" aria-label={format!("Remove {}", point.name)} onclick={remove}>{ "×" }</button>
+                    <button type="button" class="icon" aria-label={format!("Remove {}", point.name)} onclick={remove}>
+                        { "×" }
+                    </button>
                 </td>
             </tr>
             if wrong { <tr class="messages"><td colspan="15">{ messages }</td></tr> }

@@ -11,16 +11,16 @@ use spokeshave::section::library;
 use yew::prelude::*;
 
 use super::chips::{Chips, air_words, sentence};
-use super::form::Pick;
 use super::page::PageProps;
 use super::room::{Room, use_room};
 use super::verdict::Brief;
-use super::{Act, Seen, use_act};
-use crate::app::{Compared, Later};
+use crate::act::{Act, Seen, use_act};
 use crate::blade_view::{
     BladeRack, BladeStrip, DepartureChart, FlightMark, Ghost, Planform, RadiusAxis, StationCard,
 };
+use crate::form::Pick;
 use crate::number::with_unit;
+use crate::results::{Compared, Later};
 use crate::state::{Action, State};
 use crate::units::Quantity;
 
@@ -83,7 +83,9 @@ fn Chosen(props: &PageProps) -> Html {
     html! {
         <>
             <Chips state={state.part(same_chips)} points={props.later.points.clone()} />
-            <p class="point-note">{ point.map(|p| sentence(state.units, state.job(), p, (*props.now.point).as_ref())) }</p>
+            <p class="point-note">
+                { point.map(|p| sentence(state.units, state.job(), p, (*props.now.point).as_ref())) }
+            </p>
         </>
     }
 }
@@ -100,7 +102,8 @@ fn blade(props: &PageProps, lying: bool, on_select: &Callback<usize>) -> Html {
     }
     let leading_right = state.job().propeller.rotation == Rotation::ClockwiseFromBehind;
     html! {
-        <BladeRack {shape} {stations} axis={axis(state)} {length} {selected} {leading_right} {ghost} on_select={on_select.clone()} />
+        <BladeRack {shape} {stations} axis={axis(state)} {length} {selected} {leading_right} {ghost}
+            on_select={on_select.clone()} />
     }
 }
 
@@ -133,7 +136,8 @@ pub fn MapReading(props: &PageProps) -> Html {
             let words = if answered && level && props.state.along == Along::Level {
                 html! {
                     <div class="no-answer">{ along(&act, &props.state) }
-                        { " Nothing is flown level here: that takes an aircraft with a drag that the propeller can meet." }
+                        { " Nothing is flown level here: that takes an aircraft with a drag that the \
+                           propeller can meet." }
                     </div>
                 }
             } else if answered {
@@ -187,9 +191,12 @@ fn MapFigure(props: &MapFigureProps) -> Html {
     let stations = selected.iter().flat_map(|r| &r.stations).map(|s| (s.radius_m, s.departure_deg));
     html! {
         <div class="map-place">
-            <DepartureChart map={props.map.clone()} axis={axis(state)} marks={marks(props)} stations={stations.collect::<Vec<_>>()}
-                selected={state.station} length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
-                note={map_note(props)} along={along(&act, state)} radius_figures={narrow} on_station={act.on(Action::SelectStation)}
+            <DepartureChart map={props.map.clone()} axis={axis(state)} marks={marks(props)}
+                stations={stations.collect::<Vec<_>>()}
+                selected={state.station} length={state.units.unit(Quantity::Length)}
+                speed={state.units.unit(Quantity::Speed)}
+                note={map_note(props)} along={along(&act, state)} radius_figures={narrow}
+                on_station={act.on(Action::SelectStation)}
                 on_mark={act.on(Action::SelectPoint)} />
         </div>
     }
@@ -242,7 +249,8 @@ pub fn StationReading(props: &PageProps) -> Html {
     };
     html! {
         <div class="detail">
-            <StationCard station={station.clone()} index={i} count={point.stations.len()} airspeed_m_s={point.airspeed_m_s}
+            <StationCard station={station.clone()} index={i} count={point.stations.len()}
+                airspeed_m_s={point.airspeed_m_s}
                 rpm={point.rpm} {outline} lift_to_drag={now.lift_to_drag.clone()}
                 length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
                 on_select={act.on(Action::SelectStation)} />

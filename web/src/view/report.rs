@@ -7,12 +7,12 @@ use spokeshave::bench::{Paper, Sheet, pdf};
 use spokeshave::dossier::{Scale, Scales, dossier};
 use yew::prelude::*;
 
-use super::use_act;
 use super::workshop::files::not_taken;
 use super::workshop::sheets::Sheets;
 use super::workshop::{on_paper, paper_pick};
-use crate::app::RigRef;
+use crate::act::use_act;
 use crate::effect::file;
+use crate::results::RigRef;
 use crate::state::Action;
 use crate::units::{Quantity, Units};
 
@@ -62,14 +62,17 @@ pub fn ReportPanel(props: &ReportPanelProps) -> Html {
     html! {
         <div class="workshop">
             <p class="note">
-                { "Verdict, inputs, method and validity with its sources, charts, stations, strength, what to carve, readings as carved and of the logbook, \
-                   in the units picked above. What the job does not have is left out." }
+                { "Verdict, inputs, method and validity with its sources, charts, stations, strength, what \
+                   to carve, readings as carved and of the logbook, in the units picked above. What the job \
+                   does not have is left out." }
             </p>
             { paper_pick(&paper) }
             if let Some(pages) = shown {
                 <Made {pages} paper={*paper} title={rig.0.job.title.clone()} />
             } else {
-                <p class="buttons"><button type="button" class="act" disabled={*working} onclick={make}>{ label }</button></p>
+                <p class="buttons">
+                    <button type="button" class="act" disabled={*working} onclick={make}>{ label }</button>
+                </p>
             }
         </div>
     }
@@ -96,8 +99,11 @@ fn Made(props: &MadeProps) -> Html {
     };
     html! {
         <>
-            <p class="buttons"><button type="button" class="act" onclick={save}>{ "Save the report as PDF" }</button></p>
-            <Sheets sheets={props.pages.clone()} paper={props.paper} name="page" note="Charts are lines, so that they stay sharp at any size." />
+            <p class="buttons">
+                <button type="button" class="act" onclick={save}>{ "Save the report as PDF" }</button>
+            </p>
+            <Sheets sheets={props.pages.clone()} paper={props.paper} name="page"
+                note="Charts are lines, so that they stay sharp at any size." />
         </>
     }
 }

@@ -50,7 +50,12 @@ pub fn Steps() -> Html {
             setter.set(i);
             open(id);
         });
-        html! { <a {onclick} href={format!("#{id}")} title={whole_name(id)} class={on.then_some("on")} aria-current={on.then_some("true")}>{ *name }</a> }
+        html! {
+            <a {onclick} href={format!("#{id}")} title={whole_name(id)} class={on.then_some("on")}
+                aria-current={on.then_some("true")}>
+                { *name }
+            </a>
+        }
     });
     html! { <nav class="steps" aria-label="Parts of the page">{ for links }</nav> }
 }

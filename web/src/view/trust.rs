@@ -29,7 +29,7 @@ pub(super) fn trust() -> Html {
     let misses = rows.iter().filter_map(|row| match row[..] {
         [what, reason] => {
             let figures = what.split("; ").map(|figure| html! { <b>{ minus(figure) }</b> });
-            Some(html! { <li>{ for figures }{ minus(&crate::view::form::capital(reason)) }{ "." }</li> })
+            Some(html! { <li>{ for figures }{ minus(&crate::form::capital(reason)) }{ "." }</li> })
         }
         _ => None,
     });
@@ -37,11 +37,17 @@ pub(super) fn trust() -> Html {
         <div class="trust">
             <h3>{ "How far to trust it" }</h3>
             <p class="note">
-                { "What it computes beside what measurements, closed forms and independent programs say; the list of all with sources and tolerances \
-                   is kept with the program’s sources. A tested figure is no proof that a blade holds or flies." }
+                { "What it computes beside what measurements, closed forms and independent programs say; \
+                   the list of all with sources and tolerances is kept with the program’s sources. A tested \
+                   figure is no proof that a blade holds or flies." }
             </p>
             <table class="sheet-table">
-                <thead><tr><th scope="col">{ "Part" }</th><th scope="col">{ "Compared" }</th><th scope="col">{ "Within tolerance" }</th></tr></thead>
+                <thead>
+                    <tr>
+                        <th scope="col">{ "Part" }</th><th scope="col">{ "Compared" }</th>
+                        <th scope="col">{ "Within tolerance" }</th>
+                    </tr>
+                </thead>
                 <tbody>{ for parts }</tbody>
             </table>
             <details><summary>{ "What misses, and why" }</summary><ul>{ for misses }</ul></details>

@@ -2,8 +2,8 @@
 
 use yew::prelude::*;
 
-use super::form::Pick;
-use super::use_act;
+use crate::act::use_act;
+use crate::form::Pick;
 use crate::state::Action;
 use crate::units::{
     AreaUnit, ForceUnit, HeightUnit, LengthUnit, MassUnit, PowerUnit, SpeedUnit, TorqueUnit, Units,

@@ -178,17 +178,24 @@ fn order(bench: &Bench, unit: Unit) -> Vec<String> {
     };
     let finish = if stock.is_wood() { "seal" } else { "smooth" };
     vec![
-        format!("{}; mark its middle line, its axis, its front (looks ahead) and its rear (looks aft).", stock.making()),
+        format!(
+            "{}; mark its middle line, its axis, its front (looks ahead) and its rear (looks aft).",
+            stock.making()
+        ),
         drilling(bench).into(),
         format!("Lay the plan on the front and saw square, leaving the line{other}."),
-        "Lay the rear on the bench. At every station mark the face line on both sawn sides, from the bench heights.".into(),
+        "Lay the rear on the bench. At every station mark the face line on both sawn sides, from the bench \
+         heights."
+            .into(),
         format!(
-            "Face (the flat, rear side): cut down to the marks at every station, then plane straight from mark to mark. No {} of the blade lies below that \
-             line; what is hollow or round in the face is left to the face cards.",
+            "Face (the flat, rear side): cut down to the marks at every station, then plane straight from \
+             mark to mark. No {} of the blade lies below that line; what is hollow or round in the face is \
+             left to the face cards.",
             stock.word()
         ),
         format!(
-            "Back (the cambered, forward side): cut it to the back cards; their datum edges stand {} off the blank all along.",
+            "Back (the cambered, forward side): cut it to the back cards; their datum edges stand {} off \
+             the blank all along.",
             unit.say(1e-3 * datum_mm(bench))
         ),
         format!(

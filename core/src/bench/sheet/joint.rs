@@ -132,14 +132,16 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
     let (n, layers) = (bench.form.blade.count, bench.blank.layers.planks.len());
     let mut words = vec![
         format!(
-            "The boards of {n} blades, each {} wide, are lapped in the hub, lamination over lamination (common practice).",
+            "The boards of {n} blades, each {} wide, are lapped in the hub, lamination over lamination \
+             (common practice).",
             unit.say(bench.blank.width_m)
         ),
         format!("In lamination 1 {} through; the others butt against the sides.", runs_through(bench, 0)),
     ];
     words.extend(butts(bench).into_iter().map(|(angle_deg, from_m)| {
         format!(
-            "A board that stands at {angle_deg:.1}° to the one that runs through is cut at that angle to its own middle line, {} from the axis along it.",
+            "A board that stands at {angle_deg:.1}° to the one that runs through is cut at that angle to \
+             its own middle line, {} from the axis along it.",
             unit.say(from_m)
         )
     }));
@@ -149,16 +151,23 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
             180.0 / f64::from(n)
         ));
     }
-    words.push("Every lamination is turned on by one blade against the one below it, so that no joint lies over the one below it.".into());
+    words.push(
+        "Every lamination is turned on by one blade against the one below it, so that no joint lies over \
+         the one below it."
+            .into(),
+    );
     words.push("Glue both faces of every board, and clamp them between plates while the glue sets.".into());
     let least = if n.is_multiple_of(2) { n / 2 } else { n };
     if (layers as u32) < least {
         words.push(format!(
-            "Only {layers} laminations: {least} are needed for every blade to run through once (the laminations of the job's wood)."
+            "Only {layers} laminations: {least} are needed for every blade to run through once (the \
+             laminations of the job's wood)."
         ));
     }
     words.push(
-        "The strength of this joint is not judged. Separate blades in a metal hub are another job: a ground-adjustable propeller.".into(),
+        "The strength of this joint is not judged. Separate blades in a metal hub are another job: a \
+         ground-adjustable propeller."
+            .into(),
     );
     words
 }

@@ -68,7 +68,11 @@ fn words(bench: &Bench, unit: Unit) -> Vec<String> {
         words.push(boards(fanned));
     }
     if layers.step_rad != 0.0 {
-        words.push("Each lamination is turned about the axis, a front one in the direction of turning; widths are square to it.".into());
+        words.push(
+            "Each lamination is turned about the axis, a front one in the direction of turning; widths are \
+             square to it."
+                .into(),
+        );
     }
     words.push(format!("Heights of the faces above the rear of the blank, in {}.", unit.plural()));
     words

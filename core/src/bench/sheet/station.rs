@@ -52,14 +52,17 @@ fn tables(bench: &Bench, stations: &[Carved], unit: Unit, room: [f64; 2]) -> Dra
 }
 
 /// What the heights are of.
-const HEADING: &str = "LE is the side of the leading edge, TE that of the trailing edge. Sawn sides: from the middle line to the outline on the plan. Face \
-    line: the straight line from side to side to which the face is planed; no part of the blade lies below it, and a flat face lies on it. Down: the same line \
-    measured from a straight-edge over the front of the blank. The edges themselves lie higher, where both cards meet.";
+const HEADING: &str = "LE is the side of the leading edge, TE that of the trailing edge. Sawn sides: from \
+    the middle line to the outline on the plan. Face line: the straight line from side to side to which the \
+    face is planed; no part of the blade lies below it, and a flat face lies on it. Down: the same line \
+    measured from a straight-edge over the front of the blank. The edges themselves lie higher, where both \
+    cards meet.";
 /// What is said where a mark cannot be made.
-const PAST: &str = "Where a height is below 0, above the thickness of the blank or missing, the face line comes out at the rear or the front of the blank before it \
-    reaches that side: there draw it by the angle below.";
-const PROTRACTOR: &str = "Protractor: angle from the rear of the blank. Lay it on the face, square to the blade, where the face is flat; else along the chord line of \
-    the cards.";
+const PAST: &str = "Where a height is below 0, above the thickness of the blank or missing, the face line \
+    comes out at the rear or the front of the blank before it reaches that side: there draw it by the angle \
+    below.";
+const PROTRACTOR: &str = "Protractor: angle from the rear of the blank. Lay it on the face, square to the \
+    blade, where the face is flat; else along the chord line of the cards.";
 
 const HEIGHTS: [Column; 11] = [
     figures("station", 13.0),

@@ -16,8 +16,10 @@ const WORDS_MM: f64 = 3.6;
 const BELOW_MM: f64 = 14.0;
 
 /// What the columns mean.
-const MEANING: &str = "Face: the flat, rear side. Off the face at an edge: so deep there, falling to nothing at the other edge. Off the back (cambered, forward): at the \
-    thickest place, fading to both edges. Off the trailing edge: from the chord, after the face. Then: what the blade measures afterwards. –: nothing.";
+const MEANING: &str = "Face: the flat, rear side. Off the face at an edge: so deep there, falling to \
+    nothing at the other edge. Off the back (cambered, forward): at the thickest place, fading to both \
+    edges. Off the trailing edge: from the chord, after the face. Then: what the blade measures afterwards. \
+    –: nothing.";
 /// How it is cut.
 const CUTTING: &str = "Wood only comes off. Cut less than it says, and measure again.";
 

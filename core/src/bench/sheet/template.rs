@@ -152,9 +152,12 @@ fn words(station: &Carved, side: Side, unit: Unit) -> Vec<String> {
 /// What the sheet of templates says on top.
 fn note(bench: &Bench, unit: Unit, room: [f64; 2]) -> Vec<String> {
     let words = format!(
-        "Seen from the tip towards the hub. Back cards lie on the back of the blade (cambered, forward), face cards on its face (flat, rear); a pair meets along the \
-         chord line, here drawn apart. Thick edges are the datum: square to the axis, {} ahead of the front and behind the rear of the blank. Dash-dotted: the \
-         middle line of the blank (pitch axis). Dashed: a line at the blade angle, parallel to the chord line, on the face card of a flat face to that face. Cut on the line, glue to card or ply.",
+        "Seen from the tip towards the hub. Back cards lie on the back of the blade (cambered, forward), \
+         face cards on its face (flat, rear); a pair meets along the chord line, here drawn apart. Thick \
+         edges are the datum: square to the axis, {} ahead of the front and behind the rear of the blank. \
+         Dash-dotted: the middle line of the blank (pitch axis). Dashed: a line at the blade angle, \
+         parallel to the chord line, on the face card of a flat face to that face. Cut on the line, glue to \
+         card or ply.",
         unit.say(1e-3 * datum_mm(bench))
     );
     wrapped(&words, NOTE_MM, room[0])

@@ -46,8 +46,8 @@ pub fn picture(name: &str, shown: &Drawing) -> String {
 fn opening([w, h]: [f64; 2], name: &str) -> String {
     let [w, h] = [mm(w), mm(h)];
     format!(
-        "<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"{w}mm\" height=\"{h}mm\" viewBox=\"0 0 {w} {h}\" role=\"img\" \
-         font-family=\"Helvetica, Arial, sans-serif\"><title>{}</title>",
+        "<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"{w}mm\" height=\"{h}mm\" viewBox=\"0 0 {w} {h}\" \
+         role=\"img\" font-family=\"Helvetica, Arial, sans-serif\"><title>{}</title>",
         escaped(name)
     )
 }

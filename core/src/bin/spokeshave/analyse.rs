@@ -87,7 +87,8 @@ fn varied_row(p: &PointResult) -> Vec<String> {
 fn text(analysis: &Analysis) -> String {
     let p = &analysis.propeller;
     let mut out = format!(
-        "{}\n{} blades, {:.0} mm across, {:.1}° and {:.0} mm pitch at 0.75 R, activity factor {:.0}, solidity {:.3}\n\n",
+        "{}\n{} blades, {:.0} mm across, {:.1}° and {:.0} mm pitch at 0.75 R, activity factor {:.0}, \
+         solidity {:.3}\n\n",
         analysis.title,
         p.blades,
         1000.0 * p.diameter_m,
@@ -101,7 +102,8 @@ fn text(analysis: &Analysis) -> String {
         out += "\n\n";
         out += &stations_text(point);
     }
-    out + "\n\nDeparture is the angle of attack less the angle of best lift-to-drag: below zero the station is slack, above it hard."
+    out + "\n\nDeparture is the angle of attack less the angle of best lift-to-drag: below zero the station \
+           is slack, above it hard."
 }
 
 fn points_table(points: &[PointResult]) -> String {

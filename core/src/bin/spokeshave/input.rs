@@ -32,7 +32,13 @@ pub(crate) struct JobSource {
     #[arg(required_unless_present = "demo")]
     job: Option<PathBuf>,
     /// An invented job instead of a file: light-aeroplane, unmanned, multirotor
-    #[arg(long, value_name = "NAME", conflicts_with = "job", num_args = 0..=1, default_missing_value = "light-aeroplane")]
+    #[arg(
+        long,
+        value_name = "NAME",
+        conflicts_with = "job",
+        num_args = 0..=1,
+        default_missing_value = "light-aeroplane"
+    )]
     demo: Option<String>,
 }
 

@@ -63,7 +63,7 @@ enum Command {
     Fit(fit::Args),
     /// A better blade for the job, as a variant beside the drawn one
     Shape(shape::Args),
-    /// Will it hold: weight and strength of the blade
+    /// Will it hold: weight and strength of the blade; its sheets of paper and its files
     Bench(bench::Args),
     /// The blades as carved: differences, what they do, what can be put right
     Carved(carved::Args),

@@ -34,7 +34,9 @@ fn a_guess_is_the_polynomial_through_the_last_answers() {
     trail.push(&met(3.0, cubic(3.0)));
     let line = cubic(1.0) + (cubic(3.0) - cubic(1.0)) / 2.0 * 8.0;
     assert!((guessed(&trail, 9.0) - line).abs() < 1e-9);
-    [4.0, 7.0].iter().for_each(|v| trail.push(&met(*v, cubic(*v))));
+    for v in [4.0, 7.0] {
+        trail.push(&met(v, cubic(v)));
+    }
     for v in [2.0, 9.0, 15.0] {
         assert!((guessed(&trail, v) - cubic(v)).abs() < 1e-8, "{v}");
     }

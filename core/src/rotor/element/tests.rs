@@ -101,9 +101,12 @@ proptest! {
             // Two roots may lie equally far from α = 0: then either is the answer.
             let same = (quick - slow).abs() < 1e-6;
             let tie = ((e.angle_rad - quick).abs() - (e.angle_rad - slow).abs()).abs() < 1e-6;
-            // Where the residual just grazes zero it has two roots within one step of the march, which passes over them.
-            let grazes = roots[1..].iter().any(|twin| (twin - slow).abs() < STEP_RAD) && roots.iter().any(|r| (r - quick).abs() < 1e-6);
-            prop_assert!(same || tie || grazes, "{} {} of {}", quick.to_degrees(), slow.to_degrees(), e.angle_rad.to_degrees());
+            // Where the residual just grazes zero it has two roots within one step of the march, which passes over
+            // them.
+            let grazes = roots[1..].iter().any(|twin| (twin - slow).abs() < STEP_RAD)
+                && roots.iter().any(|r| (r - quick).abs() < 1e-6);
+            let [quick_deg, slow_deg, blade_deg] = [quick, slow, e.angle_rad].map(f64::to_degrees);
+            prop_assert!(same || tie || grazes, "{} {} of {}", quick_deg, slow_deg, blade_deg);
         }
     }
 }

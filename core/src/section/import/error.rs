@@ -94,7 +94,8 @@ pub enum ImportError {
     },
     /// Angles of one polar out of order.
     #[error(
-        "line {line}, column {column} (alpha): {found} degrees follows {before} degrees of line {before_line}; within a polar each angle is above the one before"
+        "line {line}, column {column} (alpha): {found} degrees follows {before} degrees of line \
+         {before_line}; within a polar each angle is above the one before"
     )]
     Unordered {
         /// Line.
@@ -110,7 +111,8 @@ pub enum ImportError {
     },
     /// An angle twice in one polar.
     #[error(
-        "line {line}, column {column} (alpha): {found} degrees again, as on line {before_line}; an angle stands once in a polar"
+        "line {line}, column {column} (alpha): {found} degrees again, as on line {before_line}; an angle \
+         stands once in a polar"
     )]
     RepeatedAngle {
         /// Line.

@@ -3,7 +3,8 @@ use std::fmt::Write;
 use super::*;
 use proptest::prelude::*;
 
-const GOOD: &str = "alpha_deg,cl,cd,cm,Re\n-2,0.1,0.0100,-0.05,2e5\n0,0.3,0.009,-0.05,2e5\n2,0.5,0.009,-0.05,2e5\n4,0.7,0.010,-0.05,2e5\n6,0.9,0.013,-0.05,2e5\n";
+const GOOD: &str = "alpha_deg,cl,cd,cm,Re\n-2,0.1,0.0100,-0.05,2e5\n0,0.3,0.009,-0.05,2e5\n\
+    2,0.5,0.009,-0.05,2e5\n4,0.7,0.010,-0.05,2e5\n6,0.9,0.013,-0.05,2e5\n";
 
 fn message(text: &str) -> String {
     read(text, "").unwrap_err().to_string()
@@ -107,7 +108,10 @@ proptest! {
     #[test]
     fn no_table_panics_and_what_is_read_is_sound(
         separator in prop::sample::select(vec![",", ";", "\t"]),
-        rows in prop::collection::vec(prop::collection::vec("-?[0-9]{0,3}[.,]?[0-9]{0,3}|NaN|inf|1e999|%|\"|", 0..6), 0..30),
+        rows in prop::collection::vec(
+            prop::collection::vec("-?[0-9]{0,3}[.,]?[0-9]{0,3}|NaN|inf|1e999|%|\"|", 0..6),
+            0..30,
+        ),
     ) {
         let lines: Vec<String> = rows.iter().map(|r| r.join(separator)).collect();
         let text = format!("alpha_deg{separator}cl{separator}cd{separator}re\n{}", lines.join("\n"));

@@ -41,7 +41,8 @@ pub enum MakeError {
     Solver(#[from] SolverError),
     /// No polar has enough points.
     #[error(
-        "no polar has {FEWEST_POINTS} points that converged ({converged} of {tried} points did): nothing to make a table of"
+        "no polar has {FEWEST_POINTS} points that converged ({converged} of {tried} points did): nothing to \
+         make a table of"
     )]
     NoTable {
         /// Points that converged.

@@ -37,7 +37,8 @@ pub enum OutlineError {
     },
     /// A line after the name is not a pair of numbers.
     #[error(
-        "line {line}: `{text}` is not a pair of numbers x y; one line for a name may stand before the first pair"
+        "line {line}: `{text}` is not a pair of numbers x y with decimal points; one line for a name may stand before the \
+         first pair"
     )]
     NotAPair {
         /// Line counted from 1.

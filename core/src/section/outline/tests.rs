@@ -187,10 +187,14 @@ proptest! {
         let _ = Outline::read(&text);
     }
 
-    /// Lists of figures, with repeats, gaps, words and figures without bound: an outline whose measures are finite, or an error.
+    /// Lists of figures, with repeats, gaps, words and figures without bound: an outline whose measures are finite,
+    /// or an error.
     #[test]
     fn no_list_of_figures_panics(
-        lines in prop::collection::vec("(-?[01](\\.[0-9]{1,4})? -?0(\\.[0-9]{1,4})?)|1 0|0 0||NaN 0|1e999 1|x|9", 0..60),
+        lines in prop::collection::vec(
+            "(-?[01](\\.[0-9]{1,4})? -?0(\\.[0-9]{1,4})?)|1 0|0 0||NaN 0|1e999 1|x|9",
+            0..60,
+        ),
     ) {
         if let Ok(outline) = Outline::read(&lines.join("\n")) {
             let m = outline.measures();

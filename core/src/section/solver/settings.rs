@@ -74,7 +74,8 @@ pub enum SolverError {
     },
     /// The angles asked for are none, too many, or not in order.
     #[error(
-        "{count} angles from {first_deg} to {last_deg} degrees: 1 to 400 rising angles within -30 to 30 degrees are allowed"
+        "{count} angles from {first_deg} to {last_deg} degrees: 1 to 400 rising angles within -30 to 30 \
+         degrees are allowed"
     )]
     Angles {
         /// How many.

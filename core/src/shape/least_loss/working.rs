@@ -1,7 +1,6 @@
 //! How a station carries its share of the lift: its chord, lift coefficient and angle.
 
 use super::Lift;
-use crate::report::best_of;
 use crate::result::Bound;
 use crate::rig::Rig;
 use crate::rotor::Condition;
@@ -57,7 +56,7 @@ pub(super) fn works(
     let given = lift.and_then(|cl| incidence(&element.section, cl.min(most)));
     let alpha_rad = given.or_else(|| match limits.lift {
         Lift::Coefficient(cl) => incidence(&element.section, cl),
-        Lift::LeastDrag | Lift::BestIncidence => best_of(&element).map(|b| b.alpha_rad),
+        Lift::LeastDrag | Lift::BestIncidence => element.section.best().map(|b| b.alpha_rad),
     });
     let alpha_rad = alpha_rad.ok_or(no_lift)?;
     let c = element.section.at(alpha_rad);

@@ -128,12 +128,13 @@ pub static TRIPPED_0012: LazyLock<Vec<Solved>> = LazyLock::new(|| {
 
 fn ladson() -> Vec<Check> {
     let (points, b) = (&TRIPPED_0012, LADSON_BASIS);
-    let drag = |(p, (alpha, _, cd)): (&Solved, (f64, f64, f64))| {
-        b.relative(format!("0012 tripped drag at {alpha}"), p.cd, cd, DRAG)
+    let at = |alpha: f64| points.iter().find(|p| p.alpha_deg == alpha).expect("converged");
+    let drag = |(alpha, _, cd): (f64, f64, f64)| {
+        b.relative(format!("0012 tripped drag at {alpha}"), at(alpha).cd, cd, DRAG)
     };
-    let mut checks: Vec<Check> = points.iter().zip(LADSON).map(drag).collect();
+    let mut checks: Vec<Check> = LADSON.map(drag).into();
     let slope = |first: f64, last: f64| (last - first) / (4.04 + 4.04);
-    let computed = slope(points[0].cl, points[4].cl);
+    let computed = slope(at(LADSON[0].0).cl, at(LADSON[4].0).cl);
     let published = slope(LADSON[0].1, LADSON[4].1);
     checks.push(b.relative("0012 tripped slope", computed, published, SLOPE).unit("1/°"));
     checks.push(b.relative("0012 tripped lift max", lift_max(points), 1.6116, LIFT_MAX));

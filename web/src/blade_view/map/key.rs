@@ -32,7 +32,9 @@ pub fn DepartureKey() -> Html {
                 { "stalled" }
             </span>
             <span class="key-item">
-                <svg width="28" height="16" aria-hidden="true"><line class="band-edge" x1="0" x2="28" y1="8" y2="8" /></svg>
+                <svg width="28" height="16" aria-hidden="true">
+                    <line class="band-edge" x1="0" x2="28" y1="8" y2="8" />
+                </svg>
                 { "working band" }
             </span>
         </div>

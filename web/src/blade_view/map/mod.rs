@@ -91,11 +91,14 @@ pub fn DepartureChart(props: &DepartureChartProps) -> Html {
     let on_radius = nearest_station(&props.stations, &props.on_station);
     let height = props.axis.map_height_px();
     let words = &props.note;
-    let note = html! { <><span class="map-note" title={words.clone()}>{ props.along.clone() }{ words }</span><DepartureKey /></> };
+    let note = html! {
+        <><span class="map-note" title={words.clone()}>{ props.along.clone() }{ words }</span><DepartureKey /></>
+    };
     html! {
         <Figure title="Departure over the whole speed range" {note} {table} class="map-figure">
             <div class="map" ref={node}>
-                <svg width={px(width)} height={px(height)} viewBox={format!("0 0 {} {}", px(width), px(height))} role="img"
+                <svg width={px(width)} height={px(height)}
+                    viewBox={format!("0 0 {} {}", px(width), px(height))} role="img"
                     aria-label="Departure by airspeed and radius; its table has the figures">
                     <Paint {layers} frame={frame.clone()} />
                     { station_lines(&frame, props) }
@@ -141,13 +144,16 @@ fn axes(frame: &Frame, props: &DepartureChartProps) -> Html {
     let speeds = clear(placed(&frame.speed(), &props.speed, most), 46.0);
     html! {
         <g aria-hidden="true">
-            <rect class="frame" x={px(frame.left)} y={px(frame.axis.top_px)} width={px(frame.width())} height={px(frame.height())} />
+            <rect class="frame" x={px(frame.left)} y={px(frame.axis.top_px)} width={px(frame.width())}
+                height={px(frame.height())} />
             { bottom(&speeds, y) }
             <text class="axis-figure" x={right.clone()} y={px(y + 16.0)} text-anchor="end">{ props.speed.name }</text>
             { advance_axis(frame, props, most) }
             if props.radius_figures {
                 { left(&placed(&frame.axis.scale(), &props.length, MOST), frame.left) }
-                <text class="axis-figure" x={px(frame.left - 7.0)} y={px(frame.axis.top_px - 6.0)} text-anchor="end">{ props.length.name }</text>
+                <text class="axis-figure" x={px(frame.left - 7.0)} y={px(frame.axis.top_px - 6.0)} text-anchor="end">
+                    { props.length.name }
+                </text>
             }
         </g>
     }

@@ -28,7 +28,8 @@ pub(super) fn Paint(props: &PaintProps) -> Html {
     let [x, y, w, h] = [frame.left, frame.axis.top_px, frame.width(), frame.height()].map(px);
     html! {
         <g class="map-paint" aria-hidden="true">
-            <svg x={x.clone()} y={y.clone()} width={w.clone()} height={h.clone()} viewBox={format!("{x} {y} {w} {h}")}>
+            <svg x={x.clone()} y={y.clone()} width={w.clone()} height={h.clone()}
+                viewBox={format!("{x} {y} {w} {h}")}>
                 <rect class={classes!("band", style_of_class(0))} {x} {y} width={w} height={h} />
                 { for layers.fills.iter().map(fill) }
                 <path class="stall-veil" d={layers.stalled.clone()} />

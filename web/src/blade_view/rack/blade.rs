@@ -58,7 +58,9 @@ fn tip_figure(layout: &Layout, props: &BladeRackProps, last_tick: Option<f64>) -
     html! {
         <g class="tick">
             <line x1={px(AXIS - 4.0)} x2={px(AXIS)} y1={px(y)} y2={px(y)} />
-            <text x={px(AXIS - 7.0)} y={px(y + 4.0)} text-anchor="end">{ props.length.short_figure(layout.axis.tip_m) }</text>
+            <text x={px(AXIS - 7.0)} y={px(y + 4.0)} text-anchor="end">
+                { props.length.short_figure(layout.axis.tip_m) }
+            </text>
         </g>
     }
 }
@@ -71,7 +73,11 @@ fn bands(layout: &Layout, props: &BladeRackProps) -> Html {
         .stations
         .iter()
         .zip(bands)
-        .map(|(s, band)| html! { <path class={classes!("band", departure::style(s.departure_deg))} d={piece(band)} /> })
+        .map(|(s, band)| {
+            html! {
+                <path class={classes!("band", departure::style(s.departure_deg))} d={piece(band)} />
+            }
+        })
         .collect()
 }
 

@@ -21,7 +21,8 @@ pub(super) fn drawing(layout: &Layout, props: &BladeRackProps) -> Html {
                 viewBox={format!("{} {} {} {}", px(left), px(axis.top_px), px(w), px(h))}>
                 <path class="working-band" d={band(layout, &props.stations)} />
                 { grid(layout, props) }
-                <line class="best-line" x1={px(x.px(0.0))} x2={px(x.px(0.0))} y1={px(axis.top_px)} y2={px(axis.hub_px)} />
+                <line class="best-line" x1={px(x.px(0.0))} x2={px(x.px(0.0))} y1={px(axis.top_px)}
+                    y2={px(axis.hub_px)} />
                 { props.ghost.as_ref().map(|g| html! { <path class="ghost" d={ghost_line(layout, g)} /> }) }
                 <path class="profile-line" d={line(layout, &props.stations)} />
             </svg>
@@ -35,7 +36,9 @@ pub(super) fn drawing(layout: &Layout, props: &BladeRackProps) -> Html {
 fn heading(layout: &Layout) -> Html {
     let (x, top) = (layout.departure(), layout.axis.top_px);
     let figures = [-6.0, -4.0, -2.0, 0.0, 2.0, 4.0, 6.0].into_iter().map(|d| {
-        html! { <text class="axis-figure" x={px(x.px(d))} y={px(top - 7.0)} text-anchor="middle">{ signed(d, 0) }</text> }
+        html! {
+            <text class="axis-figure" x={px(x.px(d))} y={px(top - 7.0)} text-anchor="middle">{ signed(d, 0) }</text>
+        }
     });
     html! {
         <>

@@ -65,7 +65,10 @@ fn cut(
         <>
             { lead }
             <line class="cut" x1={left} x2={right} y1={px(y)} y2={px(y)} />
-            if chosen { <line class="ink-line" x1={px(BALLOON + BALLOON_R + 8.0)} x2={px(layout.width)} y1={px(y)} y2={px(y)} /> }
+            if chosen {
+                <line class="ink-line" x1={px(BALLOON + BALLOON_R + 8.0)} x2={px(layout.width)} y1={px(y)}
+                    y2={px(y)} />
+            }
         </>
     }
 }
@@ -92,7 +95,9 @@ fn label(layout: &Layout, index: usize, station: &StationResult, y: f64) -> Html
             <text class="balloon-figure" x={px(BALLOON)} y={px(y + 4.0)} text-anchor="middle">{ index + 1 }</text>
             <g class={tag}>
                 <rect x={px(x)} y={px(y - TAG_HEIGHT / 2.0)} width={px(TAG_WIDTH)} height={px(TAG_HEIGHT)} rx="2" />
-                <text x={px(x + TAG_WIDTH / 2.0)} y={px(y + 4.5)} text-anchor="middle">{ signed_or_none(station.departure_deg, 1) }</text>
+                <text x={px(x + TAG_WIDTH / 2.0)} y={px(y + 4.5)} text-anchor="middle">
+                    { signed_or_none(station.departure_deg, 1) }
+                </text>
             </g>
         </>
     }

@@ -73,7 +73,9 @@ fn header(props: &StationCardProps) -> Html {
     let step = |to: Option<usize>, sign: &'static str, name: &'static str| {
         let select = props.on_select.clone();
         let onclick = Callback::from(move |_: MouseEvent| to.into_iter().for_each(|i| select.emit(i)));
-        html! { <button type="button" {onclick} disabled={to.is_none()} aria-label={name} title={name}>{ sign }</button> }
+        html! {
+            <button type="button" {onclick} disabled={to.is_none()} aria-label={name} title={name}>{ sign }</button>
+        }
     };
     let outward = Some(props.index + 1).filter(|i| *i < props.count);
     html! {

@@ -79,7 +79,8 @@ pub(super) fn Section(props: &SectionProps) -> Html {
     let name = format!("Section at its blade angle of {}°", fixed(station.blade_angle_deg, 1));
     let width = px(props.width);
     html! {
-        <svg class="section-figure" width={width.clone()} height={px(HEIGHT)} viewBox={format!("0 0 {width} {HEIGHT}")}
+        <svg class="section-figure" width={width.clone()} height={px(HEIGHT)}
+            viewBox={format!("0 0 {width} {HEIGHT}")}
             role="img" aria-label={name}>
             { plane(&stand, props.width) }
             { outline(&stand, &props.outline) }
@@ -104,7 +105,8 @@ fn plane(stand: &Stand, width: f64) -> Html {
     html! {
         <>
             <line class="centre-line" x1="0" x2={px(width)} y1={y.clone()} y2={y} />
-            <text class="axis-figure haloed" x={px(width - 2.0)} y={px(stand.nose[1] + if above { -5.0 } else { 13.0 })} text-anchor="end">
+            <text class="axis-figure haloed" x={px(width - 2.0)}
+                y={px(stand.nose[1] + if above { -5.0 } else { 13.0 })} text-anchor="end">
                 { "plane of turning" }
             </text>
         </>
@@ -149,7 +151,9 @@ fn angle_mark(stand: &Stand, blade_angle_deg: f64) -> Html {
     html! {
         <>
             <path class="angle-arc" d={path.into_string()} />
-            <text class="haloed" x={px(at[0])} y={px(at[1] + 4.0)} text-anchor={anchor}>{ format!("{}°", fixed(blade_angle_deg, 1)) }</text>
+            <text class="haloed" x={px(at[0])} y={px(at[1] + 4.0)} text-anchor={anchor}>
+                { format!("{}°", fixed(blade_angle_deg, 1)) }
+            </text>
         </>
     }
 }

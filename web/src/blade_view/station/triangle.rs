@@ -60,7 +60,8 @@ pub(super) fn Triangle(props: &TriangleProps) -> Html {
     };
     let name = words_for_all(&air, &props.speed);
     html! {
-        <svg class="triangle" width={px(props.width)} height={px(HEIGHT)} viewBox={format!("0 0 {} {HEIGHT}", px(props.width))}
+        <svg class="triangle" width={px(props.width)} height={px(HEIGHT)}
+            viewBox={format!("0 0 {} {HEIGHT}", px(props.width))}
             role="img" aria-label={name}>
             { arrows(&air, props) }
         </svg>

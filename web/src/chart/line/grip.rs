@@ -104,7 +104,10 @@ pub(super) fn Holder(props: &GripProps) -> Html {
     let pointer = (taken, moved, released(Pull::LetGo), released(Pull::PutBack));
     let (onpointerdown, onpointermove, onpointerup, onpointercancel) = pointer;
     if !grip.keys {
-        return html! { <div class="grip" aria-hidden="true" {style} {onpointerdown} {onpointermove} {onpointerup} {onpointercancel}></div> };
+        return html! {
+            <div class="grip" aria-hidden="true" {style} {onpointerdown} {onpointermove} {onpointerup}
+                {onpointercancel}></div>
+        };
     }
     html! {
         <div class="grip" role="slider" tabindex="0" aria-label={grip.name.clone()} aria-orientation="horizontal"

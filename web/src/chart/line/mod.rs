@@ -152,7 +152,8 @@ pub fn LineChart(props: &LineChartProps) -> Html {
     html! {
         <Figure title={props.title.clone()} {table} class="line-figure">
             <div class="line-chart" ref={node}>
-                <svg width={px(width)} height={px(props.height)} viewBox={format!("0 0 {} {}", px(width), px(props.height))}
+                <svg width={px(width)} height={px(props.height)}
+                    viewBox={format!("0 0 {} {}", px(width), px(props.height))}
                     role="img" aria-label={description(props)}>
                     { inside::inside(&layout, props) }
                     { axes(&layout, props) }
@@ -177,11 +178,14 @@ fn axes(layout: &Layout, props: &LineChartProps) -> Html {
     let up = placed(&layout.y, &props.y.unit, layout.rows);
     html! {
         <g aria-hidden="true">
-            <rect class="frame" x={px(layout.left)} y={px(layout.top)} width={px(layout.width())} height={px(layout.height())} />
+            <rect class="frame" x={px(layout.left)} y={px(layout.top)} width={px(layout.width())}
+                height={px(layout.height())} />
             { bottom(&along, layout.low) }
             { left(&up, layout.left) }
             <text class="axis-figure" x="0" y="11">{ heading(&props.y) }</text>
-            <text class="axis-figure" x={px(layout.right)} y={px(layout.low + 31.0)} text-anchor="end">{ heading(&props.x) }</text>
+            <text class="axis-figure" x={px(layout.right)} y={px(layout.low + 31.0)} text-anchor="end">
+                { heading(&props.x) }
+            </text>
         </g>
     }
 }

@@ -59,7 +59,9 @@ fn shown(props: &ReadingProps, x: f64) -> Html {
         Some(html! {
             <>
                 <circle class="reading-dot" cx={px(x)} cy={px(y)} r="3" />
-                <text class="haloed strong" x={px(x + side)} y={px((y - 6.0).max(top + 11.0))} text-anchor={anchor}>{ figure }</text>
+                <text class="haloed strong" x={px(x + side)} y={px((y - 6.0).max(top + 11.0))} text-anchor={anchor}>
+                    { figure }
+                </text>
             </>
         })
     };

@@ -83,7 +83,9 @@ pub(super) struct NearProps {
 #[component]
 pub(super) fn Near(props: &NearProps) -> Html {
     if props.near.is_empty() {
-        return html! { <p class="note">{ "No natural frequency lies within 10 % of 1 to 4 times a turn in any case." }</p> };
+        return html! {
+            <p class="note">{ "No natural frequency lies within 10 % of 1 to 4 times a turn in any case." }</p>
+        };
     }
     let line = |n: &NearOrder| {
         format!(
@@ -99,7 +101,10 @@ pub(super) fn Near(props: &NearProps) -> Html {
     };
     html! {
         <div>
-            <p class="note">{ "Near a whole number of times a turn, where steady unevenness of the air or the engine can shake it:" }</p>
+            <p class="note">
+                { "Near a whole number of times a turn, where steady unevenness of the air or the engine \
+                   can shake it:" }
+            </p>
             <ul class="limits">{ for props.near.iter().map(|n| html! { <li>{ line(n) }</li> }) }</ul>
         </div>
     }
@@ -139,9 +144,20 @@ pub(super) fn HubTable(props: &HubTableProps) -> Html {
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="Hub">
             <table class="sheet-table">
-                <caption>{ format!("Hub: greatest torque {}, pull of a blade {}; least margin {} %", torque(Some(h.torque_n_m)),
-                    with_unit(units, Quantity::Force, Some(h.pull_n)), signed(100.0 * h.margin, 0)) }</caption>
-                <thead><tr><th scope="col">{ "What" }</th><th scope="col">{ "Found" }</th><th scope="col">{ "Limit" }</th></tr></thead>
+                <caption>
+                    { format!(
+                        "Hub: greatest torque {}, pull of a blade {}; least margin {} %",
+                        torque(Some(h.torque_n_m)),
+                        with_unit(units, Quantity::Force, Some(h.pull_n)),
+                        signed(100.0 * h.margin, 0)
+                    ) }
+                </caption>
+                <thead>
+                    <tr>
+                        <th scope="col">{ "What" }</th><th scope="col">{ "Found" }</th>
+                        <th scope="col">{ "Limit" }</th>
+                    </tr>
+                </thead>
                 <tbody>{ for rows.into_iter().chain(past).map(row) }</tbody>
             </table>
         </div>

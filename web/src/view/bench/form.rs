@@ -3,9 +3,9 @@
 use spokeshave::wood::SPECIES;
 use yew::prelude::*;
 
+use crate::act::{Seen, use_act};
+use crate::form::{Labelled, Pick, Shown, Switch, capital};
 use crate::state::{Action, Choice, Field, Running, WoodChoice, WoodFigure, species_of, wood_of};
-use crate::view::form::{Labelled, Pick, Shown, Switch, capital};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`WoodForm`].
 #[derive(Properties, PartialEq)]
@@ -28,9 +28,12 @@ pub(super) fn WoodForm(props: &WoodFormProps) -> Html {
     let asked = |figure: &WoodFigure| wooden || *figure != WoodFigure::Moisture;
     html! {
         <div class="machine-form">
-            <Pick label="Material" {options} picked={species_of(job)} onpick={act.on(move |i| choose(WoodChoice::Species(i)))} />
+            <Pick label="Material" {options} picked={species_of(job)}
+                onpick={act.on(move |i| choose(WoodChoice::Species(i)))} />
             if own { <p class="note">{ "The job brings a material of its own." }</p> }
-            if job.wood.is_none() { <p class="note">{ "The job names no material: this one is taken until another is picked." }</p> }
+            if job.wood.is_none() {
+                <p class="note">{ "The job names no material: this one is taken until another is picked." }</p>
+            }
             { for WoodFigure::BLADE.into_iter().filter(asked).map(|figure| labelled(state, figure)) }
             <Switch label="Judge the hub" on={held} onswitch={act.on(move |on| choose(WoodChoice::Hub(on)))} />
             if held { { for WoodFigure::HUB.map(|figure| labelled(state, figure)) } }

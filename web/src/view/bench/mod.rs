@@ -12,7 +12,8 @@ use std::rc::Rc;
 use spokeshave::result::{Finding, Strength};
 use yew::prelude::*;
 
-use super::{Seen, caution};
+use super::caution;
+use crate::act::Seen;
 use crate::number::{signed, with_unit};
 use crate::results::Sheet;
 use crate::state::State;

@@ -3,8 +3,8 @@
 use yew::prelude::*;
 
 use super::table::Columns;
+use crate::act::Seen;
 use crate::units::Quantity;
-use crate::view::Seen;
 
 /// Properties of [`TableHead`].
 #[derive(Properties, PartialEq)]
@@ -43,9 +43,17 @@ pub fn TableHead(props: &TableHeadProps) -> Html {
                 if columns.face { { th("On face", "deg", "") } }
                 { th("Pitch", length, "wide-only") }
                 if columns.sections { { th("Section", "", "") } }
-                <th scope="colgroup" colspan={columns.points.len().to_string()} class="group">{ "Departure, degrees" }</th>
-                <th scope="col" rowspan="2" class="wide-only" title={now.to_string()}>{ "To best" }<small>{ now_short }</small></th>
-                if let Some(name) = &columns.beside { <th scope="col" rowspan="2" class="beside">{ name }<small>{ "chord, angle, departure" }</small></th> }
+                <th scope="colgroup" colspan={columns.points.len().to_string()} class="group">
+                    { "Departure, degrees" }
+                </th>
+                <th scope="col" rowspan="2" class="wide-only" title={now.to_string()}>
+                    { "To best" }<small>{ now_short }</small>
+                </th>
+                if let Some(name) = &columns.beside {
+                    <th scope="col" rowspan="2" class="beside">
+                        { name }<small>{ "chord, angle, departure" }</small>
+                    </th>
+                }
             </tr>
             <tr>{ for points }</tr>
         </thead>

@@ -8,11 +8,11 @@ use yew::prelude::*;
 use super::head::point_class;
 use super::section_options;
 use super::table::Columns;
+use crate::act::{Seen, use_act};
 use crate::chart::departure::style;
+use crate::form::{Entry, Message, Pick, Shown};
 use crate::number::signed_or_none;
 use crate::state::{Action, Choice, Field, Measure, Running};
-use crate::view::form::{Entry, Message, Pick, Shown};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`StationRow`].
 #[derive(Properties, PartialEq)]
@@ -57,7 +57,8 @@ pub fn StationRow(props: &StationRowProps) -> Html {
                 </th>
                 <BoxCells boxes={boxes.clone()} />
                 if columns.sections { <td><SectionPick index={i} state={state.clone()} /></td> }
-                <DepartureCells points={columns.points.clone()} departures={props.departures.clone()} point={state.point} now={props.now} />
+                <DepartureCells points={columns.points.clone()} departures={props.departures.clone()}
+                    point={state.point} now={props.now} />
                 if columns.beside.is_some() { <td class="beside">{ props.beside.clone() }</td> }
             </tr>
             if !wrong.is_empty() { <tr class="messages"><td colspan="16">{ messages }</td></tr> }

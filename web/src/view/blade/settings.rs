@@ -4,9 +4,9 @@ use spokeshave::job::{AngleReference, PitchControl, Rotation};
 use yew::prelude::*;
 
 use super::{one_section, section_options};
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Labelled, Pick, Shown};
 use crate::state::{Action, Choice, ControlKind, Field, Running};
-use crate::view::form::{Labelled, Pick, Shown};
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`BladeSettings`].
 #[derive(Properties, PartialEq)]
@@ -32,7 +32,8 @@ pub fn BladeSettings(props: &BladeSettingsProps) -> Html {
             { reference(&act, state) }
             { section(&act, state) }
             { control(&act, state) }
-            <Labelled shown={Shown::of(state, &[], Field::Blockage)} label="Air slowed by the body behind" hint="not" />
+            <Labelled shown={Shown::of(state, &[], Field::Blockage)} label="Air slowed by the body behind"
+                hint="not" />
             { for control_fields(state).iter().map(|&(field, label)| labelled(field, label)) }
         </div>
     }

@@ -10,12 +10,12 @@ use yew::prelude::*;
 use super::head::TableHead;
 use super::one_section;
 use super::row::StationRow;
-use crate::app::Compared;
+use crate::act::{Seen, use_act};
 use crate::number::{figure, fixed, signed_or_none};
+use crate::results::Compared;
 use crate::state::choice::FEWEST_STATIONS;
 use crate::state::{Action, Choice, Running};
 use crate::units::Quantity;
-use crate::view::{Seen, use_act};
 
 /// Most flight points that get a column.
 const MOST_COLUMNS: usize = 4;
@@ -66,7 +66,8 @@ pub fn StationTable(props: &StationTableProps) -> Html {
     let rows = (0..props.drawn.len()).rev().map(|i| {
         html! {
             <StationRow key={i} index={i} state={state.clone()} drawn={props.drawn.clone()} columns={columns.clone()}
-                departures={departures(i)} beside={beside(props, i)} now={departure(props.point.as_ref().as_ref(), i)} />
+                departures={departures(i)} beside={beside(props, i)}
+                now={departure(props.point.as_ref().as_ref(), i)} />
         }
     });
     let by_station = {
@@ -86,10 +87,15 @@ pub fn StationTable(props: &StationTableProps) -> Html {
                 { "Boxed figures are yours to type in; a comma or a point is decimal, a unit may follow. " }
                 if columns.face { { "“On face” is what a protractor reads on the flat face. " } }
                 { match job.propeller.angle_reference {
-                    AngleReference::ChordLine => "Angles are kept to the chord line, and pitch is reckoned from that. ",
-                    AngleReference::FlatFace => "Angles are kept as read on the flat face, and pitch is reckoned from that. ",
+                    AngleReference::ChordLine => {
+                        "Angles are kept to the chord line, and pitch is reckoned from that. "
+                    }
+                    AngleReference::FlatFace => {
+                        "Angles are kept as read on the flat face, and pitch is reckoned from that. "
+                    }
                 } }
-                { "“To best” is the first turn towards the best angle; the inflow moves a little when the blade does. " }
+                { "“To best” is the first turn towards the best angle; the inflow moves a little when the \
+                   blade does. " }
                 if one_section(job).is_some() {
                     <button type="button" class="inline" onclick={by_station}>
                         { if *open { "Hide sections" } else { "Sections by station" } }
@@ -147,7 +153,8 @@ fn RowButtons(props: &RowButtonsProps) -> Html {
             <button type="button" class="act" onclick={choose(Choice::AddStation(i))}>
                 { format!("Add a station outward of {}", i + 1) }
             </button>
-            <button type="button" class="act" disabled={count <= FEWEST_STATIONS} onclick={choose(Choice::RemoveStation(i))}>
+            <button type="button" class="act" disabled={count <= FEWEST_STATIONS}
+                onclick={choose(Choice::RemoveStation(i))}>
                 { format!("Remove station {}", i + 1) }
             </button>
         </p>

@@ -5,11 +5,12 @@ use spokeshave::result::Doubt;
 use yew::prelude::*;
 
 use super::choose;
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Entry, Message, Shown};
 use crate::number::{figure, fixed, with_unit};
 use crate::state::{BladeFigure, CarvedChoice, Field, State, between_stations};
 use crate::units::Quantity;
-use crate::view::form::{Entry, Message, Shown};
-use crate::view::{Act, Seen, onward, use_act};
+use crate::view::onward;
 
 /// Properties of [`BladeEntry`].
 #[derive(Properties, PartialEq)]
@@ -45,7 +46,8 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
     };
     let wrong = columns.iter().flatten().filter(|s| s.message.is_some());
     html! {
-        <fieldset class="carved-blade" onkeydown={Callback::from(|e: KeyboardEvent| onward::next(&e, ".carved-blades"))}>
+        <fieldset class="carved-blade"
+            onkeydown={Callback::from(|e: KeyboardEvent| onward::next(&e, ".carved-blades"))}>
             <legend>{ format!("Blade {}", blade + 1) }</legend>
             <div class="carved-columns">
                 <div class="carved-column radii" aria-hidden="true">
@@ -54,10 +56,13 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
                 </div>
                 { for BladeFigure::ALL.iter().zip(&columns).map(column) }
             </div>
-            // In a place of their own: beside the boxes a message that comes or goes would make the boxes anew and take the focus away.
+            // In a place of their own: beside the boxes a message that comes or goes would make the boxes anew and
+            // take the focus away.
             <div class="carved-said">
                 { for wrong.map(|s| html! { <Message shown={s.clone()} named=true /> }) }
-                { for between_stations(state.job(), blade).into_iter().map(|(i, r)| between(&act, state, [blade, i], r)) }
+                { for between_stations(state.job(), blade)
+                    .into_iter()
+                    .map(|(i, r)| between(&act, state, [blade, i], r)) }
                 { for props.doubts.iter().map(|d| doubted(&act, state, d)) }
             </div>
         </fieldset>
@@ -83,7 +88,9 @@ fn between(act: &Act, state: &State, [blade, i]: [usize; 2], r: BladeReading) ->
     html! {
         <p class="note">
             { "Between stations: radius " }{ &place }{ for BladeFigure::ALL.iter().filter_map(read) }{ ". " }
-            <button type="button" class="inline" aria-label={format!("Take it out, radius {place}")} {onclick}>{ "Take it out" }</button>
+            <button type="button" class="inline" aria-label={format!("Take it out, radius {place}")} {onclick}>
+                { "Take it out" }
+            </button>
         </p>
     }
 }

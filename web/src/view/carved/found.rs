@@ -44,7 +44,10 @@ fn differences(blade: &CarvedBlade, units: Units) -> Html {
                 </tr></thead>
                 <tbody>{ for blade.stations.iter().map(|s| difference(s, units)) }</tbody>
             </table>
-            <p class="note">{ "In grey: not read there, but taken from between the readings, from beyond them, or as drawn. Angles to the chord line." }</p>
+            <p class="note">
+                { "In grey: not read there, but taken from between the readings, from beyond them, or as \
+                   drawn. Angles to the chord line." }
+            </p>
         </div>
     }
 }
@@ -86,14 +89,19 @@ pub(super) fn Points(props: &FoundProps) -> Html {
             <>
                 { brief_row(&p.drawn, "drawn", None, None, units) }
                 { brief_row(&p.carved, "carved", Some(p), p.once_per_turn, units) }
-                if let Some(p) = planned { { brief_row(&p.carved, "after the cuts below", Some(p), p.once_per_turn, units) } }
+                if let Some(p) = planned {
+                    { brief_row(&p.carved, "after the cuts below", Some(p), p.once_per_turn, units) }
+                }
             </>
         }
     });
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="Flight points as carved">
             <table class="sheet-table">
-                <caption>{ "What it does, and what shakes the shaft once per turn: moments across it by unequal thrusts and by blades out of track, forces by unequal drag and unequal masses" }</caption>
+                <caption>
+                    { "What it does, and what shakes the shaft once per turn: moments across it by unequal \
+                       thrusts and by blades out of track, forces by unequal drag and unequal masses" }
+                </caption>
                 <thead><tr>
                     <th scope="col">{ "Flight point" }</th><th scope="col">{ "Blades" }</th>
                     <th scope="col">{ "Speed" }<small>{ units.symbol(Quantity::Speed) }</small></th>
@@ -125,7 +133,7 @@ fn brief_row(
     };
     html! {
         <tr>
-            <th scope="row">{ if point.is_none() { b.name.clone() } else { String::new() } }</th>
+            if point.is_none() { <th scope="row">{ &b.name }</th> } else { <td></td> }
             <td>{ blades }</td>
             <td>{ of(Quantity::Speed, b.airspeed_m_s) }</td>
             <td>{ of(Quantity::Rpm, b.rpm) }</td>

@@ -11,11 +11,11 @@ use spokeshave::job::AngleReference;
 use spokeshave::result::Doubt;
 use yew::prelude::*;
 
-use super::form::Pick;
-use super::{Act, Seen, use_act};
-use crate::app::RigRef;
+use crate::act::{Act, Seen, use_act};
+use crate::form::Pick;
 use crate::number::fixed;
 use crate::results::CarvedFound;
+use crate::results::RigRef;
 use crate::state::{Action, CarvedChoice, Choice, Running, State};
 use entry::BladeEntry;
 use found::{Balance, Differences, Holds, Points};
@@ -89,8 +89,11 @@ pub fn CarvedPanel(props: &CarvedPanelProps) -> Html {
     html! {
         <div class="carved">
             <p class="note">
-                { "Type what the protractor and the callipers read; leave empty what was not measured. Enter goes down the column. \
-                   An angle may be in decimals or in degrees and minutes, 18 30 or 18..30. Track is how far the blade lies ahead of the plane of the hub, less than nothing where it lies behind. Between readings the difference from the drawing is interpolated." }
+                { "Type what the protractor and the callipers read; leave empty what was not measured. \
+                   Enter goes down the column. An angle may be in decimals or in degrees and minutes, 18 30 \
+                   or 18..30. Track is how far the blade lies ahead of the plane of the hub, less than \
+                   nothing where it lies behind. Between readings the difference from the drawing is \
+                   interpolated." }
             </p>
             <div class="settings unprinted">
                 <Pick label="Angles read" options={vec!["on the flat face".into(), "to the chord line".into()]}
@@ -109,7 +112,9 @@ fn results(props: &CarvedPanelProps) -> Html {
     }
     let found = match props.found.as_deref() {
         None => {
-            return html! { <p class="note" aria-busy="true">{ "The readings are worked out while this panel is open." }</p> };
+            return html! {
+                <p class="note" aria-busy="true">{ "The readings are worked out while this panel is open." }</p>
+            };
         }
         Some(Err(why)) => return html! { <p class="note">{ format!("Nothing yet: {why}.") }</p> },
         Some(Ok(found)) => Rc::new(found.clone()),

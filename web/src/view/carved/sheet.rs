@@ -6,9 +6,9 @@ use spokeshave::sheet::MOST_BYTES;
 use yew::prelude::*;
 
 use super::choose;
+use crate::act::{Seen, use_act};
 use crate::state::{CarvedChoice, State};
 use crate::view::pasted::Pasted;
-use crate::view::{Seen, use_act};
 
 const HINT: &str =
     "blade,radius_mm,face angle,chord_mm,thickness_mm\n1,300,31 15,93.5,20.4\n1,540,18.6,76,11.2";
@@ -41,8 +41,9 @@ pub(super) fn ReadingsSheet(props: &ReadingsSheetProps) -> Html {
         <details class="import unprinted">
             <summary>{ "Bring in a sheet of readings, or start over" }</summary>
             <p class="note">
-                { "A line of headings with units, then a row for each place: blade, radius_mm or station, face angle or chord-line angle, \
-                   chord_mm, thickness_mm, track_mm. It takes the place of the readings above." }
+                { "A line of headings with units, then a row for each place: blade, radius_mm or station, \
+                   face angle or chord-line angle, chord_mm, thickness_mm, track_mm. It takes the place of \
+                   the readings above." }
             </p>
             <Pasted id="carved-sheet" label="Readings" hint={HINT} most_bytes={MOST_BYTES} {take} />
             <p class="buttons">

@@ -16,11 +16,16 @@ pub(super) fn TakeOffSheet(props: &FoundProps) -> Html {
             <>
                 <h3>{ format!("What to take off, for the departure as drawn at {}", plan.flight_point) }</h3>
                 <p class="note">
-                    { "The face is the flat, rear side, the back the cambered, forward one. Depths off the face at the leading or the trailing edge fall to \
-                       nothing at the other edge; off the back at the thickest place, fading to the edges; then off the trailing edge. Wood \
-                       only comes off: what stays wrong is in the last column, and nothing is cut where nothing was read. Cut less than it says, and measure again." }
+                    { "The face is the flat, rear side, the back the cambered, forward one. Depths off the \
+                       face at the leading or the trailing edge fall to nothing at the other edge; off the \
+                       back at the thickest place, fading to the edges; then off the trailing edge. Wood \
+                       only comes off: what stays wrong is in the last column, and nothing is cut where \
+                       nothing was read. Cut less than it says, and measure again." }
                 </p>
-                { for plan.warns(&props.found.carved).into_iter().map(|warns| html! { <p class="warning">{ warns }</p> }) }
+                { for plan
+                    .warns(&props.found.carved)
+                    .into_iter()
+                    .map(|warns| html! { <p class="warning">{ warns }</p> }) }
                 <div class="duo">{ for plan.blades.iter().map(|b| table(b, props.units)) }</div>
             </>
         },
@@ -81,7 +86,9 @@ fn row(s: &PlannedStation, units: Units) -> Html {
             <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
             <td>{ fine(units, s.chord_m) }</td>
             <td>{ fine(units, s.thickness_m) }</td>
-            <td title={s.note()}>{ if s.note().is_empty() { signed(s.angle_deg - s.wanted_deg, 2) } else { NO_FIGURE.into() } }</td>
+            <td title={s.note()}>
+                { if s.note().is_empty() { signed(s.angle_deg - s.wanted_deg, 2) } else { NO_FIGURE.into() } }
+            </td>
         </tr>
     }
 }

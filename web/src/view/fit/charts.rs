@@ -5,13 +5,13 @@ use std::rc::Rc;
 use spokeshave::result::{Envelope, EnvelopePoint, PointResult};
 use yew::prelude::*;
 
+use crate::act::{Act, Seen, use_act};
 use crate::chart::line::grip::{Grip, Pull};
 use crate::chart::line::{Axis, Limit, LineChart, Point, Series, Stroke, Upright};
 use crate::chart::unit::Unit;
 use crate::number::{figure, with_unit};
 use crate::state::{Action, Held};
 use crate::units::Quantity;
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`Charts`].
 #[derive(Properties, PartialEq)]

@@ -86,7 +86,7 @@ fn ceiling(units: Units, ceilings: Option<Ceilings>) -> Cell {
         Some(_) => "no climb even at sea level".into(),
     };
     Cell {
-        name: "Ceiling at 0.5 m/s climb",
+        name: "Service ceiling, 0.5 m/s (100 ft/min) left",
         figure: figure(units, Quantity::Height, ceilings.and_then(|c| c.service_m)),
         unit: units.symbol(Quantity::Height),
         more,

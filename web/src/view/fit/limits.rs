@@ -73,7 +73,8 @@ fn rpm(props: &LimitsProps) -> String {
             format!("Even at rest full throttle takes the engine past {limit}: it has to be throttled back.")
         }
         None if let Some((from, to)) = envelope.too_slow_to_turn_m_s() => format!(
-            "From {} to {} full throttle cannot turn this propeller at any rpm of the engine's power curve: no figures there.",
+            "From {} to {} full throttle cannot turn this propeller at any rpm of the engine's power curve: \
+             no figures there.",
             speed(from),
             speed(to)
         ),
@@ -84,8 +85,8 @@ fn rpm(props: &LimitsProps) -> String {
 fn dive(props: &LimitsProps) -> Option<String> {
     let dive = props.envelope.marks.closed_throttle_dive?;
     Some(format!(
-        "In a dive with the throttle closed the air alone turns the propeller to {} at {}, if the engine then neither drives nor \
-         brakes. The airframe's own limit may come first.",
+        "In a dive with the throttle closed the air alone turns the propeller to {} at {}, if the engine \
+         then neither drives nor brakes. The airframe's own limit may come first.",
         with_unit(props.units, Quantity::Rpm, Some(dive.rpm)),
         with_unit(props.units, Quantity::Speed, Some(dive.airspeed_m_s))
     ))

@@ -10,8 +10,9 @@ use std::rc::Rc;
 use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use yew::prelude::*;
 
+use super::caution;
 use super::chips::air_words;
-use super::{Seen, caution};
+use crate::act::Seen;
 use crate::number::with_unit;
 use crate::state::State;
 use crate::units::Quantity;
@@ -78,7 +79,9 @@ pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
 pub fn FitPanel(props: &FitPanelProps) -> Html {
     let state = &props.state;
     let Some(known) = &props.envelope else {
-        return html! { <p class="note" aria-busy="true">{ "The speed range is worked out while this panel is open." }</p> };
+        return html! {
+            <p class="note" aria-busy="true">{ "The speed range is worked out while this panel is open." }</p>
+        };
     };
     let Some(envelope) = known.as_ref() else {
         return html! { <p class="note">{ nothing(state) }</p> };
@@ -87,9 +90,14 @@ pub fn FitPanel(props: &FitPanelProps) -> Html {
         state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
     html! {
         <div class="fit">
-            <p class="note">{ format!("The speed range{air}, the air of the flight point selected. Solid: full throttle. Dashed: level flight.") }</p>
-            <Figures envelope={envelope.clone()} take_off={props.take_off} ceilings={props.ceilings} units={state.units} />
-            <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()} limit_rpm={props.limit_rpm} />
+            <p class="note">
+                { format!("The speed range{air}, the air of the flight point selected. Solid: full \
+                           throttle. Dashed: level flight.") }
+            </p>
+            <Figures envelope={envelope.clone()} take_off={props.take_off} ceilings={props.ceilings}
+                units={state.units} />
+            <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()}
+                limit_rpm={props.limit_rpm} />
             <Limits envelope={envelope.clone()} limit_rpm={props.limit_rpm} units={state.units} />
             <Worth worth={props.worth.clone()} units={state.units} />
             { caution::fit() }
@@ -102,6 +110,6 @@ fn nothing(state: &State) -> &'static str {
     if state.job().engine.is_none() {
         return "There is no engine to turn the propeller. Give one in the Engine panel.";
     }
-    "At full throttle the engine does not turn this propeller at rest. A finer pitch, a smaller diameter or another gear \
-     ratio changes that."
+    "At full throttle the engine does not turn this propeller at rest. A finer pitch, a smaller diameter or \
+     another gear ratio changes that."
 }

@@ -27,7 +27,8 @@ pub(super) fn Worth(props: &WorthProps) -> Html {
             <table class="sheet-table worth">
                 <caption>{ "What blades that turn in flight would give, best turn of all" }</caption>
                 <thead><tr>
-                    <th scope="col">{ "Flight point" }</th><th scope="col">{ "Figure" }</th><th scope="col">{ "As set" }</th>
+                    <th scope="col">{ "Flight point" }</th><th scope="col">{ "Figure" }</th>
+                    <th scope="col">{ "As set" }</th>
                     <th scope="col">{ "Best" }</th><th scope="col">{ "Gain" }<small>{ "%" }</small></th>
                     <th scope="col">{ "Turned" }<small>{ "deg" }</small></th>
                 </tr></thead>

@@ -9,12 +9,12 @@ use spokeshave::rig::Rig;
 use yew::prelude::*;
 
 use super::lines::points;
-use crate::app::RigRef;
+use crate::act::Seen;
+use crate::form::Pick;
 use crate::number::{read, signed, with_unit};
+use crate::results::RigRef;
 use crate::units::{Quantity, Units};
-use crate::view::Seen;
 use crate::view::carved::take_off;
-use crate::view::form::Pick;
 use crate::view::sections::boxes::Line;
 
 /// Properties of [`ChangeForm`].
@@ -82,9 +82,11 @@ pub(super) fn ChangeForm(props: &ChangeFormProps) -> Html {
             <h3>{ "What to change" }</h3>
             <div class="settings unprinted">
                 <Pick label="At" options={names} picked={now.point} onpick={pick_point} />
-                <Pick label="Wanted" options={vec!["rpm of the propeller".into(), "airspeed".into()]} picked={usize::from(now.speed)} onpick={pick_figure} />
+                <Pick label="Wanted" options={vec!["rpm of the propeller".into(), "airspeed".into()]}
+                    picked={usize::from(now.speed)} onpick={pick_figure} />
                 <Line id="wanted" label="How much" unit={props.state.units.symbol(quantity)} text={now.text.clone()}
-                    message={now.answer.as_ref().and_then(|a| a.as_ref().err()).map(|why| AttrValue::from(why.clone()))} on={typed} />
+                    message={now.answer.as_ref().and_then(|a| a.as_ref().err()).cloned().map(AttrValue::from)}
+                    on={typed} />
                 <button type="button" class="act" onclick={ask}>{ "Work out the changes" }</button>
             </div>
             if let Some(Ok(changes)) = &now.answer {

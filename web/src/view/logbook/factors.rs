@@ -27,8 +27,10 @@ pub(super) fn FactorBars(props: &FactorBarsProps) -> Html {
         <div class="scroll" tabindex="0" role="region" aria-label="Factors found">
             <table class="sheet-table factors">
                 <thead><tr>
-                    <th scope="col">{ "The job’s figure times" }</th><th scope="col">{ "Found" }</th><th scope="col">{ "±" }</th>
-                    <th scope="col">{ "± before" }</th><th scope="col">{ "Thin: before, thick: with the readings" }</th><th scope="col">{ "" }</th>
+                    <th scope="col">{ "The job’s figure times" }</th><th scope="col">{ "Found" }</th>
+                    <th scope="col">{ "±" }</th>
+                    <th scope="col">{ "± before" }</th>
+                    <th scope="col">{ "Thin: before, thick: with the readings" }</th><th scope="col">{ "Remark" }</th>
                 </tr></thead>
                 <tbody>{ for found.iter().map(|f| row(f, most)) }</tbody>
             </table>
@@ -41,7 +43,10 @@ fn row(f: &FactorFound, most: f64) -> Html {
     let span = |middle: f64, half: f64| (x(middle - half), x(middle + half));
     let (before, after) = (span(1.0, f.width), span(f.value, f.value * f.deviation));
     let line = |class: &'static str, (from, to): (f64, f64)| {
-        html! { <line {class} x1={from.to_string()} x2={to.to_string()} y1={(0.5 * HEIGHT).to_string()} y2={(0.5 * HEIGHT).to_string()} /> }
+        html! {
+            <line {class} x1={from.to_string()} x2={to.to_string()} y1={(0.5 * HEIGHT).to_string()}
+                y2={(0.5 * HEIGHT).to_string()} />
+        }
     };
     let name = f.title;
     let middle = x(1.0).to_string();
@@ -52,15 +57,22 @@ fn row(f: &FactorFound, most: f64) -> Html {
             <td>{ fixed(f.value * f.deviation, 3) }</td>
             <td>{ fixed(f.width, 3) }</td>
             <td>
-                <svg class="factor-bar" width={WIDTH.to_string()} height={HEIGHT.to_string()} viewBox={format!("0 0 {WIDTH} {HEIGHT}")}
-                    role="img" aria-label={format!("{name}: {} to {}", fixed(f.value * (1.0 - f.deviation), 3), fixed(f.value * (1.0 + f.deviation), 3))}>
+                <svg class="factor-bar" width={WIDTH.to_string()} height={HEIGHT.to_string()}
+                    viewBox={format!("0 0 {WIDTH} {HEIGHT}")}
+                    role="img" aria-label={format!(
+                        "{name}: {} to {}",
+                        fixed(f.value * (1.0 - f.deviation), 3),
+                        fixed(f.value * (1.0 + f.deviation), 3)
+                    )}>
                     <line class="one" x1={middle.clone()} x2={middle} y1="1" y2={(HEIGHT - 1.0).to_string()} />
                     { line("before", before) }
                     { line("after", after) }
                     <circle cx={x(f.value).to_string()} cy={(0.5 * HEIGHT).to_string()} r="4" />
                 </svg>
             </td>
-            <td class="state">{ if f.told { "told by the readings" } else { "not told: mostly what was thought before" } }</td>
+            <td class="state">
+                { if f.told { "told by the readings" } else { "not told: mostly what was thought before" } }
+            </td>
         </tr>
     }
 }

@@ -31,9 +31,13 @@ pub(super) fn Lines(props: &LinesProps) -> Html {
             <table class="sheet-table">
                 <caption>{ "Readings against what is expected without and with the factors" }</caption>
                 <thead><tr>
-                    <th scope="col">{ "Reading" }</th><th scope="col">{ "Rpm read" }</th><th scope="col">{ "less expected, before" }</th>
-                    <th scope="col">{ "with the factors" }</th><th scope="col">{ flow }</th><th scope="col">{ "expected, before" }</th>
-                    <th scope="col">{ "with the factors" }</th><th scope="col">{ "Off" }<small>{ "times its likely error" }</small></th><th scope="col">{ "" }</th>
+                    <th scope="col">{ "Reading" }</th><th scope="col">{ "Rpm read" }</th>
+                    <th scope="col">{ "less expected, before" }</th>
+                    <th scope="col">{ "with the factors" }</th><th scope="col">{ flow }</th>
+                    <th scope="col">{ "expected, before" }</th>
+                    <th scope="col">{ "with the factors" }</th>
+                    <th scope="col">{ "Off" }<small>{ "times its likely error" }</small></th>
+                    <th scope="col">{ "Remark" }</th>
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
             </table>
@@ -107,16 +111,22 @@ pub(super) fn points<'b>(
 ) -> Html {
     let rows = pairs
         .map(|(a, b)| html! { <>{ brief(a, names[0], true, units) }{ brief(b, names[1], false, units) }</> });
-    let heading = |words: &'static str, quantity| html! { <th scope="col">{ words }<small>{ units.symbol(quantity) }</small></th> };
+    let heading = |words: &'static str, quantity| {
+        html! {
+            <th scope="col">{ words }<small>{ units.symbol(quantity) }</small></th>
+        }
+    };
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label={caption.to_string()}>
             <table class="sheet-table">
                 <caption>{ caption }</caption>
                 <thead><tr>
-                    <th scope="col">{ "Flight point" }</th><th scope="col">{ "" }</th>
-                    { heading("Speed", Quantity::Speed) }{ heading("Rpm", Quantity::Number) }{ heading("Thrust", Quantity::Force) }
-                    { heading("Power", Quantity::Power) }{ heading("Efficiency", Quantity::Number) }{ heading("Climb", Quantity::Climb) }
-                    <th scope="col">{ "" }</th>
+                    <th scope="col">{ "Flight point" }</th><th scope="col">{ "Which" }</th>
+                    { heading("Speed", Quantity::Speed) }{ heading("Rpm", Quantity::Number) }
+                    { heading("Thrust", Quantity::Force) }
+                    { heading("Power", Quantity::Power) }{ heading("Efficiency", Quantity::Number) }
+                    { heading("Climb", Quantity::Climb) }
+                    <th scope="col">{ "Remark" }</th>
                 </tr></thead>
                 <tbody>{ for rows }</tbody>
             </table>
@@ -132,7 +142,7 @@ fn brief(b: &Brief, name: &'static str, first: bool, units: Units) -> Html {
     };
     html! {
         <tr>
-            <th scope="row">{ if first { b.name.clone() } else { String::new() } }</th>
+            if first { <th scope="row">{ &b.name }</th> } else { <td></td> }
             <td>{ name }</td>
             <td>{ figure(units, Quantity::Speed, b.airspeed_m_s) }</td>
             <td>{ figure(units, Quantity::Rpm, b.rpm) }</td>

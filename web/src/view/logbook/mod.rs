@@ -12,10 +12,11 @@ use spokeshave::job::Engine;
 use spokeshave::result::Logged;
 use yew::prelude::*;
 
-use super::form::Switch;
-use super::{Act, Seen, caution, use_act};
-use crate::app::RigRef;
+use super::caution;
+use crate::act::{Act, Seen, use_act};
+use crate::form::Switch;
 use crate::number::fixed;
+use crate::results::RigRef;
 use crate::state::{Action, Choice, LogbookChoice, Running, State};
 use change::ChangeForm;
 use factors::FactorBars;
@@ -52,7 +53,8 @@ pub fn in_a_line(state: &State) -> String {
     };
     match (logbook.in_use, logbook.factors) {
         (true, Some(f)) => format!(
-            "{count}; every figure of the page uses engine power × {}, drag area × {}, power to turn the propeller × {}",
+            "{count}; every figure of the page uses engine power × {}, drag area × {}, power to turn the \
+             propeller × {}",
             fixed(f.engine_power, 3),
             fixed(f.drag_area, 3),
             fixed(f.propeller_power, 3)
@@ -93,7 +95,9 @@ fn told(act: &Act, props: &LogbookPanelProps) -> Html {
     let state = &props.state;
     let logged = match props.logged.as_deref() {
         None => {
-            return html! { <p class="note" aria-busy="true">{ "The readings are worked out while this panel is open." }</p> };
+            return html! {
+                <p class="note" aria-busy="true">{ "The readings are worked out while this panel is open." }</p>
+            };
         }
         Some(Err(why)) => return html! { <p class="note">{ format!("Nothing is told yet: {why}.") }</p> },
         Some(Ok(logged)) => Rc::new(logged.clone()),
@@ -109,11 +113,13 @@ fn told(act: &Act, props: &LogbookPanelProps) -> Html {
             <FactorBars logged={logged.clone()} />
             <ul class="remarks">{ for logged.estimate.remarks.iter().map(|r| html! { <li>{ r }</li> }) }</ul>
             <p class="buttons">
-                <button type="button" class="act" disabled={logbook.factors == Some(factors) && logbook.in_use} onclick={keep}>
+                <button type="button" class="act"
+                    disabled={logbook.factors == Some(factors) && logbook.in_use} onclick={keep}>
                     { "Keep these factors and use them on the whole page" }
                 </button>
                 if logbook.factors.is_some() {
-                    <Switch label="Use the factors kept" on={logbook.in_use} onswitch={choose(act, LogbookChoice::Use)} />
+                    <Switch label="Use the factors kept" on={logbook.in_use}
+                        onswitch={choose(act, LogbookChoice::Use)} />
                 }
             </p>
             <Lines logged={logged.clone()} units={state.units} {electric} />

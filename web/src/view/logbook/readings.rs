@@ -4,9 +4,10 @@ use web_sys::Element;
 use yew::prelude::*;
 
 use super::{choose, is_electric};
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Entry, Message, Shown, Switch};
 use crate::state::{Field, LogFigure, LogbookChoice};
-use crate::view::form::{Entry, Message, Shown, Switch};
-use crate::view::{Act, Seen, onward, use_act};
+use crate::view::onward;
 
 /// What is asked of a reading: what the engine draws is fuel or current, and the other only where it was read
 /// all the same.
@@ -70,8 +71,9 @@ pub(super) fn Readings(props: &ReadingsProps) -> Html {
     html! {
         <>
             <p class="note">
-                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is 100 or full. Tick level for flight that neither climbs nor sinks. \
-                   Pressure altitude and true airspeed, please; leave empty what was not read." }
+                { "One row for each steady reading. Ground runs go without an airspeed; full throttle is \
+                   100 or full. Tick level for flight that neither climbs nor sinks. Pressure altitude and \
+                   true airspeed, please; leave empty what was not read." }
             </p>
             if count > 0 {
                 <div class="scroll" tabindex="0" role="region" aria-label="Readings"

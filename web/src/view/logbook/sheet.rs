@@ -6,9 +6,9 @@ use spokeshave::sheet::MOST_BYTES;
 use yew::prelude::*;
 
 use super::choose;
+use crate::act::{Seen, use_act};
 use crate::state::LogbookChoice;
 use crate::view::pasted::Pasted;
-use crate::view::{Seen, use_act};
 
 const HINT: &str =
     "rpm,throttle,airspeed_km_h,altitude_m,temperature_c,level\n2990,full,0,120,18,\n2520,,170,600,12,yes";
@@ -39,8 +39,9 @@ pub(super) fn LogSheet(props: &LogSheetProps) -> Html {
         <details class="import unprinted">
             <summary>{ "Bring in a sheet of flights" }</summary>
             <p class="note">
-                { "A line of headings with units, then a row for each reading: rpm, throttle (full, a share or [%]), airspeed_km_h, altitude_m or \
-                   pressure_hpa, temperature_c, level (yes), fuel_kg_h, current_a, note. It takes the place of the readings above." }
+                { "A line of headings with units, then a row for each reading: rpm, throttle (full, a share \
+                   or [%]), airspeed_km_h, altitude_m or pressure_hpa, temperature_c, level (yes), \
+                   fuel_kg_h, current_a, note. It takes the place of the readings above." }
             </p>
             <Pasted id="log-sheet" label="Flights" hint={HINT} most_bytes={MOST_BYTES} {take} />
         </details>

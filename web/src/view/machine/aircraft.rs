@@ -9,13 +9,13 @@ use yew::prelude::*;
 use super::asked::AskedCharts;
 use super::picks::kinds;
 use super::{hinted, labelled, optional, still_invented};
+use crate::act::{Act, Seen, use_act};
 use crate::number::{figure, fixed, with_unit};
 use crate::state::{
     AircraftChoice, AircraftFigure, AircraftKind, Choice, DragBy, Field, State, aircraft_untouched,
 };
 use crate::units::{Quantity, Units};
 use crate::view::chips::air_words;
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`AircraftPanel`].
 #[derive(Properties, PartialEq)]
@@ -120,12 +120,17 @@ fn readings(state: &Seen) -> Html {
     let (units, Some(air)) = (state.units, air(state)) else { return html! {} };
     match &state.job().aircraft {
         None => html! {
-            <p class="note">{ "Without an aircraft the propeller is looked at alone: flight points need an rpm, a power or an engine." }</p>
+            <p class="note">
+                { "Without an aircraft the propeller is looked at alone: flight points need an rpm, a power \
+                   or an engine." }
+            </p>
         },
         Some(aircraft @ Aircraft::Multirotor(_)) => {
             let each = thrust_asked_n(aircraft, &air, 0.0);
             html! {
-                <p class="note">{ format!("To hover each rotor has to hold {}.", with_unit(units, Quantity::Force, each)) }</p>
+                <p class="note">
+                    { format!("To hover each rotor has to hold {}.", with_unit(units, Quantity::Force, each)) }
+                </p>
             }
         }
         Some(Aircraft::Aeroplane(a)) => html! {
@@ -167,7 +172,12 @@ fn speed_table(state: &Seen, a: &Aeroplane, air: &Air) -> Html {
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="Speeds of the aircraft">
             <table class="sheet-table">
-                <caption>{ format!("Level flight{place}; best glide {} to 1", fixed(speeds(a, air).greatest_lift_to_drag, 1)) }</caption>
+                <caption>
+                    { format!(
+                        "Level flight{place}; best glide {} to 1",
+                        fixed(speeds(a, air).greatest_lift_to_drag, 1)
+                    ) }
+                </caption>
                 <thead><tr>
                     <th scope="col">{ "Speed" }</th>
                     <th scope="col">{ "Airspeed" }<small>{ head[0] }</small></th>
@@ -184,9 +194,9 @@ fn speed_table(state: &Seen, a: &Aeroplane, air: &Air) -> Html {
 fn words(name: &str) -> &str {
     match name {
         "stall" => "Stall",
-        "least power" => "Least power, longest aloft on fuel",
-        "least drag" => "Least drag, farthest on fuel",
-        "fast cruise" => "Fast cruise, farthest for fuel and time together",
+        "least power" => "Least power, longest aloft where above the stall",
+        "least drag" => "Least drag, farthest",
+        "fast cruise" => "Fast cruise, farthest for energy and time together",
         other => other,
     }
 }

@@ -10,13 +10,13 @@ use super::offered::OfferedChart;
 use super::picks::kinds;
 use super::rows::{Rows, RowsOf};
 use super::{labelled, optional, still_invented};
+use crate::act::{Act, Seen, use_act};
 use crate::number::{fixed, with_unit};
 use crate::results::Offered;
 use crate::state::{
     AltitudeKind, Choice, EngineChoice, EngineFigure, EngineKind, Field, FuelBy, State, engine_untouched,
 };
 use crate::units::{Quantity, Units};
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`EnginePanel`].
 #[derive(Properties, PartialEq)]
@@ -116,9 +116,14 @@ fn piston(act: &Act, state: &Seen, p: &Piston) -> Html {
             { kinds(act, "Power between rows", &BETWEEN, between, p.interpolation, |to| {
                 Choice::Engine(EngineChoice::Interpolation(to))
             }) }
-            { kinds(act, "Power at height", &AltitudeKind::ALL, AltitudeKind::words, AltitudeKind::of(&p.altitude_law), |to| {
-                Choice::Engine(EngineChoice::Altitude(to))
-            }) }
+            { kinds(
+                act,
+                "Power at height",
+                &AltitudeKind::ALL,
+                AltitudeKind::words,
+                AltitudeKind::of(&p.altitude_law),
+                |to| Choice::Engine(EngineChoice::Altitude(to)),
+            ) }
             if let AltitudeLaw::HeldTo(_) = p.altitude_law { { box_of(EngineFigure::HeldTo) } }
             { kinds(act, "Fuel consumption by", &FuelBy::ALL, FuelBy::words, FuelBy::of(p), |way| {
                 Choice::Engine(EngineChoice::FuelBy(way))

@@ -12,8 +12,8 @@ pub use engine::{EnginePanel, engine_in_a_line};
 
 use yew::prelude::*;
 
-use super::Seen;
-use super::form::{Labelled, Shown, capital};
+use crate::act::Seen;
+use crate::form::{Labelled, Shown, capital};
 use crate::state::Field;
 
 /// A box under its own name.

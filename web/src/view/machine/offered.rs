@@ -92,7 +92,8 @@ fn several(props: &OfferedChartProps) -> Option<String> {
     );
     (!all.is_empty()).then(|| {
         format!(
-            "At full throttle engine and propeller agree at {}. Where the propeller's demand rises through the offer the rpm holds itself;              elsewhere it runs away to a steady one. {chosen}",
+            "At full throttle engine and propeller agree at {}. Where the propeller's demand rises through \
+             the offer the rpm holds itself; elsewhere it runs away to a steady one. {chosen}",
             places.join(", ")
         )
     })

@@ -2,9 +2,9 @@
 
 use yew::prelude::*;
 
+use crate::act::Act;
+use crate::form::Pick;
 use crate::state::{Action, Choice, Running};
-use crate::view::Act;
-use crate::view::form::Pick;
 
 /// A list to pick a kind from; `words` says what each is called, `choice` what picking it means.
 pub(super) fn kinds<T: Copy + PartialEq + 'static>(

@@ -3,10 +3,10 @@
 use spokeshave::job::{Engine, Piston};
 use yew::prelude::*;
 
+use crate::act::{Seen, use_act};
+use crate::form::{Entry, Message, Shown};
 use crate::state::{Action, Choice, EngineChoice, EngineFigure, Field, Running};
 use crate::units::Quantity;
-use crate::view::form::{Entry, Message, Shown};
-use crate::view::{Seen, use_act};
 
 /// A table of the engine.
 #[derive(Clone, Copy, Debug, PartialEq, Eq)]
@@ -135,7 +135,10 @@ fn TableRow(props: &TableRowProps) -> Html {
                 <th scope="row">{ i + 1 }</th>
                 { for boxes.iter().map(|s| html! { <td><Entry shown={s.clone()} /></td> }) }
                 <td>
-                    <button type="button" class="icon" aria-label={named("add a row after")} onclick={choose(of.add(i))}>{ "+" }</button>
+                    <button type="button" class="icon" aria-label={named("add a row after")}
+                        onclick={choose(of.add(i))}>
+                        { "+" }
+                    </button>
                     <button type="button" class="icon" aria-label={named("remove")} disabled={props.few}
                         onclick={choose(of.remove(i))}>{ "×" }</button>
                 </td>

@@ -34,7 +34,8 @@ pub(in crate::view) fn Line(props: &LineProps) -> Html {
     html! {
         <div class={classes!("labelled", props.long.then_some("long"))}>
             <label class="label" for={props.id.clone()}>{ &props.label }</label>
-            <input type="text" id={props.id.clone()} {class} value={props.text.clone()} autocomplete="off" spellcheck="false"
+            <input type="text" id={props.id.clone()} {class} value={props.text.clone()} autocomplete="off"
+                spellcheck="false"
                 disabled={props.disabled} aria-invalid={wrong.then_some("true")}
                 aria-describedby={wrong.then(|| id.clone())} {oninput} />
             <span class="unit">{ &props.unit }</span>

@@ -36,8 +36,12 @@ pub(super) fn Carved(props: &CarvedProps) -> Html {
                     <tr><th scope="col" rowspan="2">{ "Thickness, Reynolds" }</th>
                         <th scope="colgroup" class="group" colspan="3">{ "Best angle, °" }</th>
                         <th scope="colgroup" class="group" colspan="3">{ "Best cl/cd" }</th></tr>
-                    <tr><th scope="col">{ "drawn" }</th><th scope="col">{ "carved" }</th><th scope="col">{ "change" }</th>
-                        <th scope="col">{ "drawn" }</th><th scope="col">{ "carved" }</th><th scope="col">{ "change, %" }</th></tr>
+                    <tr>
+                        <th scope="col">{ "drawn" }</th><th scope="col">{ "carved" }</th>
+                        <th scope="col">{ "change" }</th>
+                        <th scope="col">{ "drawn" }</th><th scope="col">{ "carved" }</th>
+                        <th scope="col">{ "change, %" }</th>
+                    </tr>
                 </thead>
                 <tbody>{ for rows }</tbody>
             </table>

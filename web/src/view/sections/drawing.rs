@@ -33,7 +33,8 @@ pub(super) fn Drawing(props: &DrawingProps) -> Html {
     html! {
         <div class="outline-drawing">
             <div ref={node}>
-                <svg width={px(width)} height={px(height)} viewBox={format!("0 0 {} {}", px(width), px(height))} role="img"
+                <svg width={px(width)} height={px(height)}
+                    viewBox={format!("0 0 {} {}", px(width), px(height))} role="img"
                     aria-label={format!("Outline of the section: {}", facts(outline).join(", "))}>
                     <path class="section-shape" d={shape(outline)} />
                     if let Some(blunt) = &props.blunt { <path class="band-edge" d={shape(blunt)} /> }

@@ -5,7 +5,7 @@ use spokeshave::section::import::{MOST_BYTES, read};
 use yew::prelude::*;
 
 use super::boxes::{Line, Opener, Sheet};
-use crate::view::{Seen, use_act};
+use crate::act::{Seen, use_act};
 
 /// Properties of [`Import`].
 #[derive(Properties, PartialEq)]
@@ -73,18 +73,23 @@ pub(super) fn Import(props: &ImportProps) -> Html {
         <div class="import unprinted">
             <h3>{ "Bring in a measured table" }</h3>
             <p class="note">
-                { "A line of headings with units, then a row for each angle. Needed: alpha_deg or alpha_rad, cl, cd. Also read: reynolds, \
-                   mach, thickness_ratio or thickness [%]. Commas, semicolons or tabs between columns." }
+                { "A line of headings with units, then a row for each angle. Needed: alpha_deg or \
+                   alpha_rad, cl, cd. Also read: reynolds, mach, thickness_ratio or thickness [%]. Commas, \
+                   semicolons or tabs between columns." }
             </p>
-            <Sheet id="import-table" label="Table" text={draft.table.clone()} hint={HINT} message={draft.message.clone()}
+            <Sheet id="import-table" label="Table" text={draft.table.clone()} hint={HINT}
+                message={draft.message.clone()}
                 on={set(|d, text| { d.table = text; d.from.clear(); })} />
             <div class="settings">
-                <Line id="import-name" label="Section name" long=true text={draft.name.clone()} on={set(|d, text| d.name = text)} />
-                <Line id="import-face" label="Chord line above the flat face; empty: no face" unit="°" text={draft.face.clone()}
+                <Line id="import-name" label="Section name" long=true text={draft.name.clone()}
+                    on={set(|d, text| d.name = text)} />
+                <Line id="import-face" label="Chord line above the flat face; empty: no face" unit="°"
+                    text={draft.face.clone()}
                     on={set(|d, text| d.face = text)} />
             </div>
             <p class="buttons">
-                <Opener label="Open a table" accept=".csv,.txt,.tsv,text/csv,text/plain" most_bytes={MOST_BYTES} on={on_open} />
+                <Opener label="Open a table" accept=".csv,.txt,.tsv,text/csv,text/plain"
+                    most_bytes={MOST_BYTES} on={on_open} />
                 <button type="button" class="act" onclick={add}>{ "Add it to the job" }</button>
             </p>
             <p class="said" role="status">{ draft.said.clone() }</p>

@@ -12,12 +12,12 @@ use super::carved::Carved;
 use super::drawing::Drawing;
 use super::form::{Form, Place};
 use super::progress::Progress;
+use crate::act::{Seen, use_act};
 use crate::background::hand::{Hand, Heard};
 use crate::background::polars::{Report, Step};
+use crate::form::{Pick, Switch};
 use crate::number::fixed;
 use crate::view::blade::section_names;
-use crate::view::form::{Pick, Switch};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`Maker`].
 #[derive(Properties, PartialEq)]
@@ -119,7 +119,7 @@ fn use_start(
         let heard = move |heard: Heard<Report>| {
             told.set(match heard {
                 Heard::Report(Report::Step(step)) => Run::At(Some(step)),
-                Heard::Report(Report::Refused(why)) => Run::Stopped(crate::view::form::capital(&why)),
+                Heard::Report(Report::Refused(why)) => Run::Stopped(crate::form::capital(&why)),
                 Heard::Fault(why) => Run::Stopped(format!(
                     "The computation met a fault of its own and stopped; the job is as it was. It said: {why}"
                 )),
@@ -174,10 +174,10 @@ fn source_message(
     wrong: Option<&(Option<Place>, String)>,
 ) -> Option<AttrValue> {
     if let Some((None, why)) = wrong {
-        return Some(crate::view::form::capital(why).into());
+        return Some(crate::form::capital(why).into());
     }
     let why = outline.as_ref().err().filter(|_| !form.outline.trim().is_empty())?;
-    Some(crate::view::form::capital(&why.to_string()).into())
+    Some(crate::form::capital(&why.to_string()).into())
 }
 
 #[derive(Properties, PartialEq)]
@@ -220,10 +220,12 @@ fn Source(props: &SourceProps) -> Html {
     };
     html! {
         <div>
-            <Sheet id="make-outline" label="Outline: x y on each line, round the section from the trailing edge" hint={HINT}
+            <Sheet id="make-outline"
+                label="Outline: x y on each line, round the section from the trailing edge" hint={HINT}
                 text={props.form.outline.clone()} message={props.message.clone()} on={Callback::from(with)} />
             <div class="buttons">
-                <Opener label="Open an outline" accept=".dat,.txt,.csv,text/plain" most_bytes={MAX_BYTES} on={on_open} />
+                <Opener label="Open an outline" accept=".dat,.txt,.csv,text/plain" most_bytes={MAX_BYTES}
+                    on={on_open} />
                 <Pick label="Outline of a section" {options} picked={Some(0)} {onpick} bare=true />
             </div>
         </div>

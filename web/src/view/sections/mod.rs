@@ -17,8 +17,8 @@ use spokeshave::result::PointResult;
 use spokeshave::section::library;
 use yew::prelude::*;
 
-use super::{Act, Seen};
-use crate::app::RigRef;
+use crate::act::{Act, Seen};
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Running, State};
 use import::Import;
 use maker::Maker;
@@ -49,7 +49,8 @@ pub fn Sections(props: &SectionsProps) -> Html {
     };
     html! {
         <div class="sections">
-            <Used state={props.state.clone()} rig={props.rig.clone()} picked={(*picked).clone()} onpick={onpick.clone()} />
+            <Used state={props.state.clone()} rig={props.rig.clone()} picked={(*picked).clone()}
+                onpick={onpick.clone()} />
             <Maker state={props.state.clone()} {reynolds} {thickness} onjoin={onpick.clone()} />
             <Import state={props.state.clone()} onjoin={onpick} />
         </div>

@@ -29,7 +29,9 @@ pub(super) fn Progress(props: &ProgressProps) -> Html {
         <div class="work-bar">
             <progress aria-label="Polars being made" max={total.to_string()} value={done.to_string()} />
             <span>{ words }</span>
-            <button type="button" class="act" onclick={props.on_cancel.reform(|_: MouseEvent| ())}>{ "Call it off" }</button>
+            <button type="button" class="act" onclick={props.on_cancel.reform(|_: MouseEvent| ())}>
+                { "Call it off" }
+            </button>
         </div>
     }
 }

@@ -7,11 +7,11 @@ use spokeshave::section::{Family, section_curves};
 use yew::prelude::*;
 
 use super::charts::Charts;
-use crate::app::RigRef;
+use crate::act::{Seen, use_act};
+use crate::form::Pick;
 use crate::number::fixed;
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Running, State};
-use crate::view::form::Pick;
-use crate::view::{Seen, use_act};
 
 /// Properties of [`Used`].
 #[derive(Properties, PartialEq)]
@@ -121,9 +121,16 @@ fn Tables(props: &TablesProps) -> Html {
     html! {
         <>
             if !ratios.is_empty() {
-                <Pick label="Tables for" {options} picked={Some(index)} onpick={Callback::from(move |i| picked.set(Some(i)))} />
+                <Pick label="Tables for" {options} picked={Some(index)}
+                    onpick={Callback::from(move |i| picked.set(Some(i)))} />
             }
-            <p class="note">{ if family.about.origin.is_empty() { "The job does not say where the tables come from." } else { &family.about.origin } }</p>
+            <p class="note">
+                { if family.about.origin.is_empty() {
+                    "The job does not say where the tables come from."
+                } else {
+                    &family.about.origin
+                } }
+            </p>
             if *own {
                 <p class="buttons">
                     <button type="button" class="act" onclick={everywhere}>{ "Use at every station" }</button>

@@ -7,14 +7,14 @@ use spokeshave::job::{Figure, Job};
 use yew::prelude::*;
 
 use super::figures::{name, told, unit};
+use crate::act::Seen;
 use crate::background::shape::{Cost, DRAG_PERCENT, LIFT_PERCENT, Task};
 use crate::chart::line::{Axis, LineChart, Series, Stroke, Upright};
 use crate::chart::unit::Unit;
+use crate::form::Pick;
 use crate::number::significant;
 use crate::state::State;
 use crate::units::Quantity;
-use crate::view::Seen;
-use crate::view::form::Pick;
 
 /// Properties of [`Careful`].
 #[derive(Properties, PartialEq)]
@@ -99,17 +99,24 @@ pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
     });
     html! {
         <>
-            <Pick label="Shown along the blade" options={costs.iter().map(|c| words(c)).collect::<Vec<_>>()} picked={Some(shown.min(costs.len() - 1))} {onpick} />
+            <Pick label="Shown along the blade" options={costs.iter().map(|c| words(c)).collect::<Vec<_>>()}
+                picked={Some(shown.min(costs.len() - 1))} {onpick} />
             <p class="note">{ careful_words(state, cost) }</p>
             <div class="trio">{ for (0..3).map(|k| along(state, cost, k)) }</div>
             <div class="scroll" tabindex="0" role="region" aria-label="What errors of carving come to">
                 <table class="sheet-table worth">
-                    <caption>{ "What errors of carving come to, either way; linear in the errors, each difference matched anew with engine and aircraft" }</caption>
+                    <caption>
+                        { "What errors of carving come to, either way; linear in the errors, each \
+                           difference matched anew with engine and aircraft" }
+                    </caption>
                     <thead><tr>
                         <th scope="col">{ "Figure" }</th><th scope="col">{ "As drawn" }</th>
                         <th scope="col">{ "Errors apart" }<small>{ "root of squares" }</small></th>
                         <th scope="col">{ "All to the worse" }</th>
-                        <th scope="col">{ "Polars in doubt" }<small>{ format!("lift ±{LIFT_PERCENT} %, drag ±{DRAG_PERCENT} %") }</small></th>
+                        <th scope="col">
+                            { "Polars in doubt" }
+                            <small>{ format!("lift ±{LIFT_PERCENT} %, drag ±{DRAG_PERCENT} %") }</small>
+                        </th>
                     </tr></thead>
                     <tbody>{ for rows }</tbody>
                 </table>
@@ -162,7 +169,8 @@ fn along(state: &Seen, cost: &Cost, k: usize) -> Html {
         chosen: true,
     });
     html! {
-        <LineChart title={KINDS[k].0} {x} {y} {series} uprights={uprights.into_iter().collect::<Vec<_>>()} height={200.0} />
+        <LineChart title={KINDS[k].0} {x} {y} {series} uprights={uprights.into_iter().collect::<Vec<_>>()}
+            height={200.0} />
     }
 }
 

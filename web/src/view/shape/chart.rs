@@ -8,17 +8,17 @@ use yew::prelude::*;
 
 use super::figures::{ALL, name, told, unit};
 use super::lines::{Layers, Place};
-use crate::app::RigRef;
+use crate::act::{Seen, use_act};
 use crate::background::shape::{Chart, Task};
 use crate::chart::axis::{bottom, left, most_on, placed, px, rows};
 use crate::chart::figure::{Figure as Framed, Table};
 use crate::chart::pointer::place;
 use crate::chart::width::use_width;
+use crate::form::{Pick, capital};
 use crate::number::with_unit;
+use crate::results::RigRef;
 use crate::state::{Action, Beside, Variant};
 use crate::units::{Quantity, Units};
-use crate::view::form::{Pick, capital};
-use crate::view::{Seen, use_act};
 
 /// Steps of the chart each way.
 const STEPS: usize = 40;
@@ -55,7 +55,9 @@ pub(super) fn PitchDiameter(props: &PitchDiameterProps) -> Html {
             <h3>{ "Pitch and diameter" }</h3>
             <div class="buttons unprinted">
                 <Pick label="Figure" {options} {picked} {onpick} />
-                <button type="button" class="act" disabled={props.busy} {onclick}>{ format!("Draw it at {}", point_name(state)) }</button>
+                <button type="button" class="act" disabled={props.busy} {onclick}>
+                    { format!("Draw it at {}", point_name(state)) }
+                </button>
             </div>
             if let Some((_, chart)) = chart {
                 <Drawing chart={chart.clone()} rig={props.rig.clone()} units={state.units} />
@@ -96,13 +98,15 @@ pub fn Drawing(props: &DrawingProps) -> Html {
     };
     let title = format!("{} over pitch and diameter", capital(name(chart.figure)));
     let note = format!(
-        "at {}; hatched: a limit is broken, of rpm and tip at this flight point alone. A click keeps that blade beside the drawn one.",
+        "at {}; hatched: a limit is broken, of rpm and tip at this flight point alone. A click keeps that \
+         blade beside the drawn one.",
         chart.flight_point
     );
     html! {
         <Framed {title} note={html! { note }} {table} class="chart-figure">
             <div ref={node}>
-                <svg width={px(width)} height={px(Place::HEIGHT)} viewBox={format!("0 0 {} {}", px(width), px(Place::HEIGHT))} role="img"
+                <svg width={px(width)} height={px(Place::HEIGHT)}
+                    viewBox={format!("0 0 {} {}", px(width), px(Place::HEIGHT))} role="img"
                     aria-label="A figure over pitch and diameter; its table has the figures">
                     { axes(&at, units) }
                     { painted(&at, &layers) }
@@ -124,8 +128,12 @@ fn axes(at: &Place, units: Units) -> Html {
             <rect class="frame" x={px(at.left)} y={px(at.top)} width={px(at.width())} height={px(at.height())} />
             { left(&up, at.left) }
             { bottom(&along, at.low) }
-            <text class="axis-figure" x={px(at.right)} y={px(at.low + 31.0)} text-anchor="end">{ format!("diameter, {}", length.name) }</text>
-            <text class="axis-figure" x={px(at.left)} y={px(at.top - 8.0)}>{ format!("pitch at 0.75 R, {}", length.name) }</text>
+            <text class="axis-figure" x={px(at.right)} y={px(at.low + 31.0)} text-anchor="end">
+                { format!("diameter, {}", length.name) }
+            </text>
+            <text class="axis-figure" x={px(at.left)} y={px(at.top - 8.0)}>
+                { format!("pitch at 0.75 R, {}", length.name) }
+            </text>
         </g>
     }
 }
@@ -149,7 +157,8 @@ fn painted(at: &Place, layers: &Layers) -> Html {
     });
     html! {
         <g aria-hidden="true">
-            <svg x={x.clone()} y={y.clone()} width={w.clone()} height={h.clone()} viewBox={format!("{x} {y} {w} {h}")}>
+            <svg x={x.clone()} y={y.clone()} width={w.clone()} height={h.clone()}
+                viewBox={format!("{x} {y} {w} {h}")}>
                 <path class="missing" d={layers.missing.clone()} />{ for lines }{ for edges }
             </svg>
             { for words }

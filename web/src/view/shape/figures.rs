@@ -27,7 +27,7 @@ pub(super) fn name(figure: Figure) -> &'static str {
         Figure::RateOfClimbMS => "rate of climb",
         Figure::ThrustN => "thrust",
         Figure::PowerW => "shaft power",
-        Figure::TakeOffM => "take-off to 15 m",
+        Figure::TakeOffM => "take-off to 15 m (50 ft)",
         Figure::EnduranceS => "endurance",
         Figure::TipMach => "tip Mach number (noise)",
         Figure::Rpm => "rpm",

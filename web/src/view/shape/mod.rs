@@ -12,10 +12,11 @@ use spokeshave::job::FlightPoint;
 use spokeshave::shape::Wish;
 use yew::prelude::*;
 
-use super::{Seen, caution};
-use crate::app::RigRef;
+use super::caution;
+use crate::act::Seen;
 use crate::background::shape::Task;
 use crate::number::signed;
+use crate::results::RigRef;
 use crate::state::State;
 use careful::Careful;
 use chart::PitchDiameter;
@@ -69,7 +70,8 @@ pub fn ShapePanel(props: &ShapePanelProps) -> Html {
             <Blades state={state.clone()} rig={rig.clone()} />
             <PitchDiameter state={state.clone()} rig={rig.clone()} chart={work.drawn.chart.clone()} busy={work.busy()}
                 on_draw={drawing(&work, state, rig)} />
-            <Careful state={state.clone()} costs={work.drawn.costs.clone()} busy={work.busy()} on_draw={careful(&work, state)} />
+            <Careful state={state.clone()} costs={work.drawn.costs.clone()} busy={work.busy()}
+                on_draw={careful(&work, state)} />
             { caution::shape() }
         </div>
     }
@@ -91,8 +93,18 @@ fn ways(work: &Work, state: &Seen, rig: &RigRef, point: &FlightPoint) -> Html {
     html! {
         <div class="buttons ways unprinted">
             { button(format!("Best-incidence twist at {name}"), format!("twist, {name}"), Task::Twist(alone), false) }
-            { button("Best-incidence twist over all that counts".into(), "twist, all points".into(), Task::Twist(all), count < 2) }
-            { button(format!("Least induced loss at {name}"), format!("least loss, {name}"), Task::LeastLoss(here), point.airspeed_m_s == Some(0.0)) }
+            { button(
+                "Best-incidence twist over all that counts".into(),
+                "twist, all points".into(),
+                Task::Twist(all),
+                count < 2
+            ) }
+            { button(
+                format!("Least induced loss at {name}"),
+                format!("least loss, {name}"),
+                Task::LeastLoss(here),
+                point.airspeed_m_s == Some(0.0)
+            ) }
             { button("Search".into(), "search".into(), Task::Search, false) }
         </div>
     }
@@ -135,7 +147,9 @@ fn told(work: &Work) -> Html {
                 <div class="work-bar">
                     <progress aria-label={format!("Working out {name}")} />
                     <span>{ words }</span>
-                    <button type="button" class="act" onclick={move |_: MouseEvent| cancel.call_off()}>{ "Call it off" }</button>
+                    <button type="button" class="act" onclick={move |_: MouseEvent| cancel.call_off()}>
+                        { "Call it off" }
+                    </button>
                 </div>
             }
         }

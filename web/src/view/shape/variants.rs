@@ -4,16 +4,16 @@ use std::rc::Rc;
 
 use spokeshave::job::{Aim, Figure, Job};
 use spokeshave::rig::Rig;
-use spokeshave::shape::{Wish, figure_at};
+use spokeshave::shape::{Wish, brief, figure_at};
 use spokeshave::wood::least_margin;
 use yew::prelude::*;
 
 use super::figures::{better, name, told};
-use crate::app::{RigRef, Same};
+use crate::act::{Seen, use_act};
 use crate::number::{NO_FIGURE, signed, with_unit};
+use crate::results::{RigRef, Same};
 use crate::state::{Action, Beside, Variant};
 use crate::units::{Quantity, Units};
-use crate::view::{Seen, use_act};
 
 /// Properties of [`Blades`].
 #[derive(Properties, PartialEq)]
@@ -27,20 +27,22 @@ struct Row {
     diameter_m: f64,
     pitch_m: f64,
     figures: Vec<Option<f64>>,
+    /// Whether each is that throttled back to the limit rpm.
+    held: Vec<bool>,
     /// Least margin of strength, where the job names its wood.
     margin: Option<f64>,
 }
 
 impl Row {
     fn of(rig: &Rig, aims: &[Aim]) -> Self {
-        let at = |aim: &Aim| {
-            let point = rig.job.flight_points.iter().find(|p| p.name == aim.flight_point)?;
-            figure_at(rig, point, aim.figure)
-        };
+        let point = |aim: &Aim| rig.job.flight_points.iter().find(|p| p.name == aim.flight_point);
+        let at = |aim: &Aim| figure_at(rig, point(aim)?, aim.figure);
+        let held = |aim: &Aim| point(aim).is_some_and(|p| brief(rig, p).held_at_limit);
         Self {
             diameter_m: rig.job.propeller.diameter_m,
             pitch_m: rig.rotor.blade.pitch_075_m(0.0),
             figures: aims.iter().map(at).collect(),
+            held: aims.iter().map(held).collect(),
             margin: rig
                 .job
                 .wood
@@ -59,7 +61,11 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
     let drawn = use_memo((props.rig.clone(), aims.clone()), |(rig, aims)| Row::of(&rig.0, aims));
     let variants = &state.variants;
     if variants.all.is_empty() {
-        return html! { <p class="note">{ "No other blade is kept yet. What is made here stands beside the drawn blade, never over it." }</p> };
+        return html! {
+            <p class="note">
+                { "No other blade is kept yet. What is made here stands beside the drawn blade, never over it." }
+            </p>
+        };
     }
     let heads = aims.iter().map(|aim| {
         html! { <th scope="col">{ &aim.flight_point }<small>{ name(aim.figure) }</small></th> }
@@ -67,7 +73,8 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
     let job = Rc::new(rig.job.clone());
     let rows = variants.all.iter().enumerate().map(|(i, variant)| {
         html! {
-            <BladeRow key={variant.name.clone()} index={i} variant={variant.clone()} job={Same(job.clone())} compared={variants.compared == Some(i)}
+            <BladeRow key={variant.name.clone()} index={i} variant={variant.clone()} job={Same(job.clone())}
+                compared={variants.compared == Some(i)}
                 aims={aims.clone()} drawn={drawn.figures.clone()} units={state.units} />
         }
     });
@@ -75,7 +82,8 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
         <div class="scroll" tabindex="0" role="region" aria-label="Blades beside the drawn one">
             <table class="sheet-table blades">
                 <thead><tr>
-                    <th scope="col">{ "Blade" }</th><th scope="col">{ "Diameter" }</th><th scope="col">{ "Pitch" }</th>
+                    <th scope="col">{ "Blade" }</th><th scope="col">{ "Diameter" }</th>
+                    <th scope="col">{ "Pitch" }</th>
                     <th scope="col">{ "Margin of strength" }<small>{ "of the wood named" }</small></th>
                     { for heads }
                 </tr></thead>
@@ -94,6 +102,7 @@ fn figures(row: &Row, aims: &[Aim], drawn: Option<&[Option<f64>]>, units: Units)
         let gain = gain.filter(|_| aim.figure != Figure::Rpm);
         html! {
             <td>{ told(units, aim.figure, *value) }
+                if row.held[i] { <small>{ "throttled back to the limit rpm" }</small> }
                 if let Some(gain) = gain { <small class="gain">{ format!("{}\u{a0}%", signed(gain, 1)) }</small> }
             </td>
         }
@@ -136,14 +145,24 @@ fn BladeRow(props: &BladeRowProps) -> Html {
     html! {
         <tr class={classes!(compared.then_some("selected"))}>
             <th scope="row">{ name }<div class="row-acts">
-                <button type="button" class="act" aria-pressed={if compared { "true" } else { "false" }} aria-label={format!("Compare {name}")}
+                <button type="button" class="act" aria-pressed={if compared { "true" } else { "false" }}
+                    aria-label={format!("Compare {name}")}
                     onclick={send(Beside::Compare((!compared).then_some(i)))}>{ "Compare" }</button>
-                <button type="button" class="act" aria-label={format!("Use {name}")} onclick={send(Beside::Use(i))}>{ "Use" }</button>
-                <button type="button" class="act" aria-label={format!("Remove {name}")} onclick={send(Beside::Drop(i))}>{ "Remove" }</button>
+                <button type="button" class="act" aria-label={format!("Use {name}")} onclick={send(Beside::Use(i))}>
+                    { "Use" }
+                </button>
+                <button type="button" class="act" aria-label={format!("Remove {name}")}
+                    onclick={send(Beside::Drop(i))}>
+                    { "Remove" }
+                </button>
             </div></th>
             { match &*row {
                 Some(row) => figures(row, &props.aims, Some(&props.drawn), props.units),
-                None => html! { <td colspan={(props.aims.len() + 3).to_string()}>{ "not allowed in the job as it stands now" }</td> },
+                None => html! {
+                    <td colspan={(props.aims.len() + 3).to_string()}>
+                        { "not allowed in the job as it stands now" }
+                    </td>
+                },
             } }
         </tr>
     }

@@ -5,11 +5,11 @@ use spokeshave::shape::Wish;
 use yew::prelude::*;
 
 use super::figures::{ALL, name};
-use crate::app::RigRef;
+use crate::act::{Act, Seen, use_act};
+use crate::form::{Labelled, Pick, Shown, Switch, capital};
 use crate::number::fixed;
+use crate::results::RigRef;
 use crate::state::{Action, Choice, Field, LimitFigure, RpmBound, Running};
-use crate::view::form::{Labelled, Pick, Shown, Switch, capital};
-use crate::view::{Act, Seen, use_act};
 
 /// Properties of [`WishBoxes`].
 #[derive(Properties, PartialEq)]
@@ -31,7 +31,10 @@ pub(super) fn WishBoxes(props: &WishBoxesProps) -> Html {
     let aims = use_memo(props.rig.clone(), |rig| Wish::of(&rig.0).aims);
     let points = state.job().flight_points.iter().map(|point| point_rows(&act, point, &aims));
     let limits = LimitFigure::ALL.into_iter().map(|figure| {
-        html! { <Labelled shown={Shown::of(state, &[], Field::Limit(figure))} label={capital(figure.name())} hint="no limit" /> }
+        html! {
+            <Labelled shown={Shown::of(state, &[], Field::Limit(figure))} label={capital(figure.name())}
+                hint="no limit" />
+        }
     });
     let at_points = state.job().flight_points.iter().enumerate().map(|(i, point)| rpm_row(state, i, point));
     let none = Wishes::default();
@@ -45,8 +48,13 @@ pub(super) fn WishBoxes(props: &WishBoxesProps) -> Html {
             <summary>{ "What counts, limits, what stays as drawn" }</summary>
             <div class="wish-grid">
                 <fieldset><legend>{ "What counts" }</legend>{ for points }</fieldset>
-                <fieldset><legend>{ "Limits of the finished propeller" }</legend><div class="settings">{ for limits }</div></fieldset>
-                <fieldset class="rpm-by-point"><legend>{ "Propeller rpm at each flight point" }</legend><div class="settings">{ for at_points }</div></fieldset>
+                <fieldset>
+                    <legend>{ "Limits of the finished propeller" }</legend><div class="settings">{ for limits }</div>
+                </fieldset>
+                <fieldset class="rpm-by-point">
+                    <legend>{ "Propeller rpm at each flight point" }</legend>
+                    <div class="settings">{ for at_points }</div>
+                </fieldset>
                 <fieldset class="held"><legend>{ "The search leaves as drawn" }</legend>{ for held }</fieldset>
             </div>
         </details>
@@ -102,9 +110,11 @@ fn aim_row(act: &Act, point: &FlightPoint, aims: &[Aim], place: Option<usize>, m
     let now = WEIGHTS.iter().position(|w| (w - weight).abs() < 1e-9);
     html! {
         <div class="wish">
-            <Pick label={if more { format!("{}, and", point.name) } else { point.name.clone() }} {options} {picked} onpick={picked_of(act, choices)} />
+            <Pick label={if more { format!("{}, and", point.name) } else { point.name.clone() }} {options}
+                {picked} onpick={picked_of(act, choices)} />
             if aim.is_some() {
-                <Pick label={format!("Weight of {}, {}", point.name, aim.map_or("", |a| name(a.figure)))} options={weights} picked={now} onpick={picked_of(act, weighted)} bare=true />
+                <Pick label={format!("Weight of {}, {}", point.name, aim.map_or("", |a| name(a.figure)))}
+                    options={weights} picked={now} onpick={picked_of(act, weighted)} bare=true />
             }
         </div>
     }
@@ -124,7 +134,10 @@ fn changed(aims: &[Aim], place: Option<usize>, with: Option<Aim>) -> Vec<Aim> {
 /// The rpm allowed at a flight point.
 fn rpm_row(state: &Seen, i: usize, point: &FlightPoint) -> Html {
     let boxes = [(RpmBound::Least, "at least"), (RpmBound::Most, "at most")].map(|(bound, label)| {
-        html! { <Labelled shown={Shown::of(state, &[], Field::PointRpm(i, bound))} label={format!("{}, {label}", point.name)} hint="no limit" /> }
+        html! {
+            <Labelled shown={Shown::of(state, &[], Field::PointRpm(i, bound))}
+                label={format!("{}, {label}", point.name)} hint="no limit" />
+        }
     });
     html! { <>{ for boxes }</> }
 }

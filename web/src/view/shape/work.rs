@@ -7,12 +7,12 @@ use spokeshave::job::{Job, Propeller};
 use web_sys::js_sys::Date;
 use yew::prelude::*;
 
+use crate::act::{Act, use_act};
 use crate::background::hand::{Hand, Heard};
 use crate::background::shape::{Chart, Cost, Order, Report, Step, Task};
+use crate::form::capital;
 use crate::number::fixed;
 use crate::state::{Action, Beside, Variant};
-use crate::view::form::capital;
-use crate::view::{Act, use_act};
 
 /// What the work is doing or has come to.
 #[derive(Clone, Debug, Default, PartialEq)]

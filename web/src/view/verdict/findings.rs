@@ -5,9 +5,9 @@ use std::rc::Rc;
 use spokeshave::result::{Limit, Margin};
 use yew::prelude::*;
 
+use crate::form::capital;
 use crate::number::with_unit;
 use crate::units::{Quantity, Units};
-use crate::view::form::capital;
 
 #[derive(Properties, PartialEq)]
 pub(super) struct FindingsProps {

@@ -13,8 +13,8 @@ pub use cells::{Against, inside_band};
 use findings::Findings;
 pub use gauge::Gauge;
 
-use crate::app::Compared;
 use crate::number::NO_FIGURE;
+use crate::results::Compared;
 use crate::units::Units;
 
 /// A figure that decides.
@@ -96,7 +96,9 @@ pub fn Verdict(props: &VerdictProps) -> Html {
         <section aria-label={format!("Verdict at {}", result.name)}>
             <ul class="verdict">{ for cells }</ul>
             if let Some(beside) = &props.beside {
-                <p class="verdict-notes">{ format!("Grey: {}. ", beside.name) }<a href="#shape">{ "Compare another" }</a></p>
+                <p class="verdict-notes">
+                    { format!("Grey: {}. ", beside.name) }<a href="#shape">{ "Compare another" }</a>
+                </p>
             }
             <Findings margins={props.margins.clone()} units={props.units} />
             <Notes notes={result.notes.clone()} />

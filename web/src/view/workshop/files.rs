@@ -6,9 +6,9 @@ use spokeshave::bench::{Sheet, Unit, files, pdf};
 use yew::prelude::*;
 
 use super::Made;
+use crate::act::use_act;
 use crate::effect::file;
 use crate::state::{Action, Notice};
-use crate::view::use_act;
 
 #[derive(Properties, PartialEq)]
 pub(super) struct FilesProps {

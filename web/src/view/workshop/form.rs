@@ -3,10 +3,10 @@
 use spokeshave::job::Flange;
 use yew::prelude::*;
 
+use crate::act::{Seen, use_act};
+use crate::form::Pick;
 use crate::state::{Action, Choice, Field, MakingFigure, Running, State};
-use crate::view::form::Pick;
 use crate::view::machine::hinted;
-use crate::view::{Seen, use_act};
 
 /// Properties of [`MakingForm`].
 #[derive(Properties, PartialEq)]
@@ -32,7 +32,8 @@ pub(super) fn MakingForm(props: &MakingFormProps) -> Html {
             <summary>{ "How it is made" }</summary>
             <div class="machine"><div class="machine-form">
                 { for MakingFigure::ALL.map(|f| hinted(state, Field::Making(f), "usual")) }
-                <Pick label="Holes of the hub" options={["own pattern", "SAE 1", "SAE 2"].map(AttrValue::from).to_vec()}
+                <Pick label="Holes of the hub"
+                    options={["own pattern", "SAE 1", "SAE 2"].map(AttrValue::from).to_vec()}
                     picked={FLANGES.iter().position(|f| *f == flange)} {onpick} />
             </div></div>
         </details>

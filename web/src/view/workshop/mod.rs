@@ -13,8 +13,9 @@ use std::rc::Rc;
 use spokeshave::bench::{Bench, BenchError, Paper, Unit};
 use yew::prelude::*;
 
-use super::{Seen, caution, panel::Panel};
-use crate::app::RigRef;
+use super::{caution, panel::Panel};
+use crate::act::Seen;
+use crate::results::RigRef;
 use crate::units::LengthUnit;
 use files::Files;
 use form::MakingForm;
@@ -102,7 +103,9 @@ pub(super) fn paper_pick(paper: &UseStateHandle<Paper>) -> Html {
     html! {
         <div class="workshop-paper">
             <span class="label">{ "Paper" }</span>
-            <span class="segments" role="group" aria-label="Size of the paper">{ pick(Paper::A4) }{ pick(Paper::Letter) }</span>
+            <span class="segments" role="group" aria-label="Size of the paper">
+                { pick(Paper::A4) }{ pick(Paper::Letter) }
+            </span>
         </div>
     }
 }
@@ -128,7 +131,8 @@ fn Shown(props: &ShownProps) -> Html {
             </div>
             { paper_pick(&paper) }
             <Sheets sheets={laid.clone()} paper={*paper} name="sheet"
-                note="Print at 100 %, never fitted to the page, and measure the 100 mm bar on every sheet before you cut." />
+                note="Print at 100 %, never fitted to the page, and measure the 100 mm bar on every sheet \
+                      before you cut." />
             <Files made={props.made.clone()} sheets={laid} {unit} />
             { caution::paper(&props.made.0.job) }
         </div>

@@ -41,7 +41,9 @@ pub(super) fn Print(props: &PrintProps) -> Html {
         html! {
             <div class="printed-sheets">
                 <style>{ size }</style>
-                { for props.sheets.iter().map(|svg| html! { <section>{ Html::from_html_unchecked(svg.clone().into()) }</section> }) }
+                { for props.sheets.iter().map(|svg| html! {
+                    <section>{ Html::from_html_unchecked(svg.clone().into()) }</section>
+                }) }
             </div>
         },
         body.into(),

@@ -6,9 +6,9 @@ use spokeshave::bench::{Paper, Sheet, svg};
 use yew::prelude::*;
 
 use super::print::Print;
+use crate::act::use_act;
 use crate::effect::file;
 use crate::state::Action;
-use crate::view::use_act;
 
 #[derive(Properties, PartialEq)]
 pub(in crate::view) struct SheetsProps {
@@ -45,7 +45,10 @@ pub(in crate::view) fn Sheets(props: &SheetsProps) -> Html {
             <figure class="on-paper small">
                 { Html::from_html_unchecked(drawn.clone().into()) }
                 <figcaption>{ format!("{}. {}", i + 1, sheet.name) }
-                    <button type="button" class="inline" onclick={take} aria-label={format!("SVG of {} {}", props.name, i + 1)}>{ "SVG" }</button>
+                    <button type="button" class="inline" onclick={take}
+                        aria-label={format!("SVG of {} {}", props.name, i + 1)}>
+                        { "SVG" }
+                    </button>
                 </figcaption>
             </figure>
         }
@@ -53,7 +56,9 @@ pub(in crate::view) fn Sheets(props: &SheetsProps) -> Html {
     html! {
         <>
             <div class="buttons">
-                <button type="button" class="act" onclick={print}>{ format!("Print {} {}s, {}", drawn.len(), props.name, props.paper.name()) }</button>
+                <button type="button" class="act" onclick={print}>
+                    { format!("Print {} {}s, {}", drawn.len(), props.name, props.paper.name()) }
+                </button>
             </div>
             <p class="note">{ props.note }</p>
             <div class="sheet-previews">{ for props.sheets.iter().zip(drawn.iter()).enumerate().map(small) }</div>

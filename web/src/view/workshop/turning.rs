@@ -54,7 +54,8 @@ pub(super) fn Turning(props: &TurningProps) -> Html {
     html! {
         <figure class="turning">
             <figcaption>{ "The solid" }</figcaption>
-            <svg viewBox={format!("0 0 {WIDE} {TALL}")} role="img" aria-label="The finished shape, to be turned with the two sliders below">
+            <svg viewBox={format!("0 0 {WIDE} {TALL}")} role="img"
+                aria-label="The finished shape, to be turned with the two sliders below">
                 { for paths }
             </svg>
             { slider("Turn about the axis", &turn, "0", "360") }

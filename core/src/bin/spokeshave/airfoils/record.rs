@@ -140,8 +140,9 @@ struct TableSettings {
     alpha_deg: [f64; 3],
 }
 
-const METHOD: &str = "Vortex panels coupled by Newton's method with two-equation integral boundary layers, lag of the turbulent \
-    shear stress, transition by the e^n envelope (Drela, Giles, AIAA J. 25(10), 1987); drag by Squire and Young.";
+const METHOD: &str = "Vortex panels coupled by Newton's method with two-equation integral boundary layers, \
+    lag of the turbulent shear stress, transition by the e^n envelope (Drela, Giles, AIAA J. 25(10), 1987); \
+    drag by Squire and Young.";
 
 /// `family.json`.
 pub(crate) fn family(entry: &Entry, drawn: &[Outline], share: &Share) -> String {

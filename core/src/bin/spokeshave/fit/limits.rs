@@ -15,7 +15,8 @@ pub(super) fn limits(fit: &Fit, kept: &[Margin]) -> Vec<String> {
     }
     if let Some(v) = m.limit_rpm_from_m_s {
         said.push(format!(
-            "From {:.0} km/h on full throttle would pass the engine's limit rpm, or the end of its power curve: figures there are throttled back to it.",
+            "From {:.0} km/h on full throttle would pass the engine's limit rpm, or the end of its power \
+             curve: figures there are throttled back to it.",
             3.6 * v
         ));
     }
@@ -31,7 +32,9 @@ pub(super) fn limits(fit: &Fit, kept: &[Margin]) -> Vec<String> {
     }
     if let Some(d) = m.closed_throttle_dive {
         said.push(format!(
-            "In a dive with closed throttle the air alone drives the propeller to the limit rpm, {:.0}, at {:.0} km/h, if the engine then neither drives nor brakes; one that brakes allows somewhat more. The airframe's own limit may come first.",
+            "In a dive with closed throttle the air alone drives the propeller to the limit rpm, {:.0}, at \
+             {:.0} km/h, if the engine then neither drives nor brakes; one that brakes allows somewhat \
+             more. The airframe's own limit may come first.",
             d.rpm,
             3.6 * d.airspeed_m_s
         ));
@@ -78,7 +81,8 @@ fn not_held_up(fit: &Fit) -> Option<String> {
 fn gap(fit: &Fit) -> Option<String> {
     let (from, to) = fit.envelope.too_slow_to_turn_m_s()?;
     Some(format!(
-        "From {:.0} to {:.0} km/h full throttle cannot turn this propeller at any rpm of the engine's power curve: no figures there.",
+        "From {:.0} to {:.0} km/h full throttle cannot turn this propeller at any rpm of the engine's power \
+         curve: no figures there.",
         3.6 * from,
         3.6 * to
     ))

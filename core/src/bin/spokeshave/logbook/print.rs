@@ -36,7 +36,8 @@ pub(super) fn csv_rows(logged: &Logged) -> Vec<Vec<String>> {
     logged.readings.iter().map(row).collect()
 }
 
-const CAUTION: &str = "Before you act: tie the aircraft down for ground runs, keep everybody out of the disc plane, and stay within the limits of engine and airframe.";
+const CAUTION: &str = "Before you act: tie the aircraft down for ground runs, keep everybody out of the \
+    disc plane, and stay within the limits of engine and airframe.";
 
 pub(super) fn text(logged: &Logged) -> String {
     let blade = if logged.as_carved { "carved propeller, as measured" } else { "propeller as drawn" };

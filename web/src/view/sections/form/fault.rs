@@ -43,7 +43,7 @@ pub(super) fn said(error: &MakeError) -> String {
             None => other.to_string(),
         },
     };
-    format!("{}.", crate::view::form::capital(&text))
+    format!("{}.", crate::form::capital(&text))
 }
 
 /// A share of the chord that is out of its range: what, its value, the least and the most.

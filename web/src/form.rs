@@ -4,7 +4,7 @@ use spokeshave::drawn::DrawnStation;
 use web_sys::{HtmlInputElement, HtmlSelectElement};
 use yew::prelude::*;
 
-use super::use_act;
+use crate::act::use_act;
 use crate::state::{Action, Field, State, shown_text};
 
 /// What a box shows.
@@ -96,8 +96,10 @@ pub fn Entry(props: &EntryProps) -> Html {
     });
     let mode = if props.is_text { "text" } else { "decimal" };
     html! {
-        <input type="text" inputmode={mode} enterkeyhint={props.enter} class={classes!("entry", wrong.then_some("wrong"), props.class.clone())}
-            value={shown.text.clone()} placeholder={props.hint.clone()} aria-label={shown.name.clone()} autocomplete="off" spellcheck="false"
+        <input type="text" inputmode={mode} enterkeyhint={props.enter}
+            class={classes!("entry", wrong.then_some("wrong"), props.class.clone())}
+            value={shown.text.clone()} placeholder={props.hint.clone()} aria-label={shown.name.clone()}
+            autocomplete="off" spellcheck="false"
             aria-invalid={wrong.then_some("true")} aria-describedby={wrong.then(|| shown.message_id())}
             {oninput} {onchange} {onblur} {onkeydown} />
     }
