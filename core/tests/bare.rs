@@ -1,7 +1,7 @@
 //! An engine with a propeller and nothing else, and a propeller alone: each figure is that of one propeller.
 
 use spokeshave::air::Air;
-use spokeshave::fit::{envelope, line, pitch_worth, take_off_in};
+use spokeshave::fit::{Along, envelope, line, pitch_worth, take_off_in};
 use spokeshave::job::{DEMOS, Engine, FlightPoint, Job, Setting};
 use spokeshave::rig::{Rig, rotation_rad_s};
 use spokeshave::rotor::{Condition, thrustless_speed_m_s};
@@ -80,5 +80,16 @@ fn without_an_engine_a_line_stays_at_its_rpm() {
             assert!((c.airspeed_m_s - end * i as f64 / f64::from(count - 1)).abs() < 1e-9, "{c:?}");
             assert!((c.rotation_rad_s - here.rotation_rad_s).abs() < 1e-9, "{c:?}");
         }
+    }
+}
+
+/// Rings of the map stand in the middle of equal parts between hub and tip: 0.09 m and 0.76 m.
+#[test]
+fn the_rings_of_the_map_lie_evenly_between_hub_and_tip() {
+    let job = on_a_stand(Setting::FullThrottle {});
+    let map = Rig::new(&job).unwrap().map(0, Along::FullThrottle, 3, 5).unwrap();
+    assert_eq!(map.radii_m.len(), 5);
+    for (i, radius) in map.radii_m.iter().enumerate() {
+        near(*radius, 0.09 + 0.67 * (0.1 + 0.2 * i as f64), 1e-9);
     }
 }

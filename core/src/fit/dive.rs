@@ -68,7 +68,7 @@ mod tests {
     fn a_dive_is_told_as_far_as_it_is_looked_for() {
         let (mut told, mut slow, mut fast) = (0, 0, 0);
         for (turn_deg, limit_rpm) in
-            [(-4.0, 3300.0), (10.0, 3300.0), (30.0, 2000.0), (40.0, 3300.0), (45.0, 1100.0)]
+            [(-4.0, 3300.0), (30.0, 2000.0), (40.0, 3300.0), (41.5, 1100.0), (42.5, 1100.0), (43.5, 1100.0)]
         {
             let (rig, at) = turned(turn_deg, limit_rpm);
             let v = scanned(&rig, &at, limit_rpm);
