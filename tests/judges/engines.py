@@ -34,7 +34,6 @@ def quiet(browser):
 def subjects(browser, asked, folder):
     """What is looked at, one after the other; what an engine cannot do is left to the others."""
     page = asked["page"]
-    yield "job", lambda: job.whole(browser, page, folder, asked["task"], asked["axe"])
     yield "keyboard", lambda: keyboard.whole(browser, page, asked["keyboard"])
     yield "light and dark", lambda: look.light_and_dark(browser, page, asked["axe"])
     yield "motion", lambda: look.motion(browser, page)
@@ -43,6 +42,8 @@ def subjects(browser, asked, folder):
     if browser.can_print:
         yield "paper", lambda: paper.whole(browser, page, folder)
     yield "phone", lambda: phone.whole(browser, page, folder, asked["task"])
+    # Last, for the job it leaves in the browser is a large one.
+    yield "job", lambda: job.whole(browser, page, folder, asked["task"], asked["axe"])
 
 
 def holds(browser, name, look_at):

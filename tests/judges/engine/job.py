@@ -13,6 +13,8 @@ INCH_M = 0.0254
 def whole(browser, page, folder, task, axe):
     station = task["station"]
     open_page(browser, page)
+    press(browser, "Jobs")
+    press(browser, task["about"])
     shows(browser, station, task["drawn"])
     edit(browser, page, task)
     shape(browser, task)

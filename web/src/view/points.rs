@@ -7,6 +7,7 @@ use spokeshave::result::{PointResult, State as Answer};
 use yew::prelude::*;
 
 use super::caution;
+use super::verdict::throttled_back;
 use crate::act::{Seen, use_act};
 use crate::form::{Entry, Message, Pick, Shown};
 use crate::number::{figure, fixed_or_none};
@@ -179,7 +180,8 @@ struct PointAnswerProps {
 fn PointAnswer(props: &PointAnswerProps) -> Html {
     let Some(r) = &*props.result else { return html! { <td colspan="8"></td> } };
     if r.state != Answer::Ok {
-        return html! { <td colspan="8" class="state">{ r.state.sentence() }</td> };
+        let words = format!("{}{}", r.state.sentence(), throttled_back(props.units, r));
+        return html! { <td colspan="8" class="state">{ words }</td> };
     }
     let (units, f) = (props.units, &r.figures);
     let cells = [

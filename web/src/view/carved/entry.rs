@@ -5,9 +5,10 @@ use spokeshave::result::Doubt;
 use yew::prelude::*;
 
 use super::choose;
+use super::found::fine;
 use crate::act::{Act, Seen, use_act};
 use crate::form::{Entry, Message, Shown};
-use crate::number::{figure, fixed, with_unit};
+use crate::number::{fixed, with_unit};
 use crate::state::{BladeFigure, CarvedChoice, Field, State, between_stations};
 use crate::units::Quantity;
 use crate::view::onward;
@@ -31,8 +32,7 @@ pub(super) fn BladeEntry(props: &BladeEntryProps) -> Html {
         (0..stations).map(|s| Shown::of(state, &[], Field::Reading(blade, s, figure))).collect()
     };
     let columns = BladeFigure::ALL.map(shown);
-    let radius =
-        |s: &f64| figure(state.units, Quantity::Length, Some(0.5 * state.job().propeller.diameter_m * s));
+    let radius = |s: &f64| fine(state.units, 0.5 * state.job().propeller.diameter_m * s);
     let radii =
         state.job().propeller.stations.iter().map(|s| html! { <span>{ radius(&s.radius_fraction) }</span> });
     let unit = |q| unit(state, q);

@@ -4,7 +4,7 @@ use spokeshave::result::{PlannedBlade, PlannedStation};
 use yew::prelude::*;
 
 use super::found::{FoundProps, fine};
-use crate::number::{NO_FIGURE, figure, fixed, fixed_or_none, signed};
+use crate::number::{NO_FIGURE, fixed, fixed_or_none, signed};
 use crate::units::{Quantity, Units};
 
 /// A table for each blade.
@@ -63,7 +63,7 @@ pub fn table(blade: &PlannedBlade, units: Units) -> Html {
 fn notes(blade: &PlannedBlade, units: Units) -> String {
     let mut all: Vec<(&str, Vec<String>)> = Vec::new();
     for s in blade.stations.iter().filter(|s| !s.note().is_empty()) {
-        let at = figure(units, Quantity::Length, Some(s.radius_m));
+        let at = fine(units, s.radius_m);
         match all.iter_mut().find(|(why, _)| *why == s.note()) {
             Some((_, places)) => places.push(at),
             None => all.push((s.note(), vec![at])),
@@ -81,7 +81,7 @@ fn row(s: &PlannedStation, units: Units) -> Html {
     };
     html! {
         <tr class={classes!((!s.read).then_some("guessed"))}>
-            <th scope="row">{ figure(units, Quantity::Length, Some(s.radius_m)) }</th>
+            <th scope="row">{ fine(units, s.radius_m) }</th>
             { depth(s.face_leading_m) }{ depth(s.face_trailing_m) }{ depth(s.back_m) }{ depth(s.trailing_edge_m) }
             <td>{ fixed_or_none(s.face_angle_deg, 1) }</td>
             <td>{ fine(units, s.chord_m) }</td>

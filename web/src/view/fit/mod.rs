@@ -7,6 +7,7 @@ mod worth;
 
 use std::rc::Rc;
 
+use spokeshave::job::Aircraft;
 use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use yew::prelude::*;
 
@@ -58,8 +59,11 @@ pub fn same_fit(a: &State, b: &State) -> bool {
 pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
     let Some(envelope) = envelope else { return "thrust and drag, rpm, power, climb over airspeed".into() };
     let speed = |v| with_unit(state.units, Quantity::Speed, Some(v));
+    // What rises on its rotors has no wing to fly level on.
+    let flown =
+        if matches!(state.job().aircraft, Some(Aircraft::Multirotor(_))) { "climbing" } else { "level" };
     let top =
-        envelope.marks.top_speed.map(|m| format!("level at {} on full throttle", speed(m.airspeed_m_s)));
+        envelope.marks.top_speed.map(|m| format!("{flown} at {} on full throttle", speed(m.airspeed_m_s)));
     let climb = envelope
         .marks
         .best_rate_of_climb

@@ -102,7 +102,7 @@ fn figures(row: &Row, aims: &[Aim], drawn: Option<&[Option<f64>]>, units: Units)
         let gain = gain.filter(|_| aim.figure != Figure::Rpm);
         html! {
             <td>{ told(units, aim.figure, *value) }
-                if row.held[i] { <small>{ "throttled back to the limit rpm" }</small> }
+                if row.held[i] { <small class="gain">{ "at the limit rpm" }</small> }
                 if let Some(gain) = gain { <small class="gain">{ format!("{}\u{a0}%", signed(gain, 1)) }</small> }
             </td>
         }

@@ -13,9 +13,9 @@ pub use cells::{Against, inside_band};
 use findings::Findings;
 pub use gauge::Gauge;
 
-use crate::number::NO_FIGURE;
+use crate::number::{NO_FIGURE, with_unit};
 use crate::results::Compared;
-use crate::units::Units;
+use crate::units::{Quantity, Units};
 
 /// A figure that decides.
 #[derive(Clone, Debug, Default, PartialEq)]
@@ -74,6 +74,19 @@ pub struct VerdictProps {
     pub beside: Option<Rc<Compared>>,
 }
 
+/// What throttling back to the limit rpm gives, where full throttle would pass it: a sentence after another.
+pub(in crate::view) fn throttled_back(units: Units, result: &PointResult) -> String {
+    result.held.as_deref().map_or_else(String::new, |held| {
+        let told = [
+            (Quantity::Rpm, Some(held.rpm)),
+            (Quantity::Speed, Some(held.airspeed_m_s)),
+            (Quantity::Force, held.figures.thrust_n),
+        ];
+        let told = told.map(|(quantity, value)| with_unit(units, quantity, value)).join(", ");
+        format!(" Throttled back to the limit it comes to {told} of thrust.")
+    })
+}
+
 /// The figures in a row; a sentence where there is no answer.
 #[component]
 pub fn Verdict(props: &VerdictProps) -> Html {
@@ -82,6 +95,7 @@ pub fn Verdict(props: &VerdictProps) -> Html {
         return html! {
             <section class="verdict-none" aria-label="Verdict">
                 <b>{ format!("{}: no answer. ", result.name) }</b>{ result.state.sentence() }
+                { throttled_back(props.units, result) }
                 { " " }<a href="#points">{ "Set it another way" }</a>
             </section>
         };
