@@ -84,6 +84,10 @@ fn the_dive_follows_limit_rpm_and_pitch() {
         PitchControl::ConstantSpeed { rpm: 2800.0, turn_min_deg: -5.0, turn_max_deg: 4.0 };
     let (coarse, stop) = (dive_m_s(&coarser).unwrap(), dive_m_s(&governed).unwrap());
     assert!((coarse / stop - 1.0).abs() < 1e-9);
+    // So does one that holds just the limit rpm.
+    governed.propeller.pitch_control =
+        PitchControl::ConstantSpeed { rpm: 3300.0, turn_min_deg: -5.0, turn_max_deg: 4.0 };
+    assert!((dive_m_s(&governed).unwrap() / coarse - 1.0).abs() < 1e-9);
     assert!(dive_m_s(&demo(1)).is_none(), "the motor names no limit rpm");
 }
 

@@ -327,6 +327,8 @@ fn the_offer_is_the_engines_at_each_rpm_in_both_airs() {
         // An element's balance is sought, so that the last digits of the rpm count: 2e-8 comes out.
         near(Some(o.taken_w), rig.rotor.loads(&at).torque_n_m * rotation_rad_s, 1e-7);
     }
+    // 2000 of the propeller are 2500 of the engine.
+    near(at(&job, Some(35.0), Setting::Rpm { rpm: 2000.0 }).meeting.engine_rpm, 2500.0, 1e-12);
     // Two are the least that make a line: the ends.
     let ends: Vec<f64> = offer(&rig, 0, 0).iter().map(|o| o.engine_rpm.round()).collect();
     assert_eq!(ends, [2000.0, 3300.0]);
