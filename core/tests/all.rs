@@ -5,6 +5,7 @@ mod command;
 mod paper;
 
 mod bad_input;
+mod bare;
 mod bench;
 mod bench_faults;
 mod bench_solid;

@@ -9,7 +9,7 @@ use spokeshave::fit::{ceilings, crossings, envelope, highest_rpm, pitch_worth};
 use spokeshave::job::{Aeroplane, Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, Setting};
 use spokeshave::result::{Envelope, Mark, State, WorthOf};
 use spokeshave::rig::{Rig, rotation_rad_s};
-use spokeshave::rotor::{Condition, Loads};
+use spokeshave::rotor::{Condition, Loads, departure_map};
 
 fn demo(index: usize) -> Job {
     Job::from_json(DEMOS[index].json).unwrap()
@@ -230,6 +230,23 @@ fn at_the_ceilings_the_best_climb_by_a_scan_is_what_they_say() {
     }
 }
 
+/// Where no stall is known, by the speeds from 0.8 times that of least power on; so laden that the best is not
+/// far from there.
+#[test]
+fn without_a_stall_the_best_climb_is_that_of_a_scan_from_below_least_power() {
+    let mut job = laden();
+    (aeroplane(&mut job).cl_max, aeroplane(&mut job).mass_kg) = (None, 1000.0);
+    let plain = Plain::new(&job, 0.0);
+    let least = speeds(aeroplane(&mut job), &plain.air).least_power_m_s;
+    let best = highest(0.8 * least, 2.0 * least, |v| Some(plain.sine(v)? * v)).unwrap();
+    assert!(best.0 < 1.2 * least, "{best:?} {least}");
+    // A quarter above the speed of least power it is less than that.
+    assert!(1.25 * least * plain.sine(1.25 * least).unwrap() < best.1 - 5e-3);
+    let found = ceilings(&plain.rig, 0.0).unwrap().sea_level_climb_m_s.unwrap();
+    // As above.
+    assert!((found - best.1).abs() < 2e-3, "{found} {best:?}");
+}
+
 #[test]
 fn an_aeroplane_that_cannot_climb_has_no_ceiling() {
     let mut job = demo(0);
@@ -293,12 +310,27 @@ fn each_speed_of_a_range_is_that_of_a_scan() {
         if v > 0.0 {
             let sine = plain.sine(v).unwrap();
             near(f.rate_of_climb_m_s.unwrap(), v * sine, 10.0);
+            near(p.asked_n.unwrap(), 2.0 * plain.asked_n(v) / plain.all_kept(), 4000.0);
             assert_eq!(f.climb_angle_deg.is_some(), sine.abs() <= 1.0, "{v}: {sine}");
             f.climb_angle_deg.into_iter().for_each(|a| near(a.to_radians().sin(), sine, 1.0));
         }
-        assert_eq!(f.departure_deg.len(), 2);
     }
     assert!(matched > 2 && held > 2, "{matched} {held}");
+    let line: Vec<Condition> = found
+        .points
+        .iter()
+        .filter_map(|p| Some(plain.at(p.airspeed_m_s, plain.full(p.airspeed_m_s)?.rpm)))
+        .collect();
+    let map =
+        departure_map(&plain.rig.rotor, &line, &[0.5, 0.75].map(|x| x * plain.rig.rotor.blade.radius_m));
+    let told = found.points.iter().filter_map(|p| p.full.as_ref()).map(|f| &f.departure_deg);
+    for (told, cells) in told.zip(map.cells.columns()) {
+        assert_eq!(told.len(), 2);
+        for (told, cell) in told.iter().zip(cells) {
+            // Far less than is read from it; the rpm are the same to a few millionths.
+            assert!((told.unwrap() - cell.departure_deg.unwrap()).abs() < 1e-3, "{told:?} {cell:?}");
+        }
+    }
     let first = found.points.iter().position(|p| p.full.as_ref().unwrap().held_at_limit).unwrap();
     let from = found.marks.limit_rpm_from_m_s.unwrap();
     let between = found.points[first - 1].airspeed_m_s..=found.points[first].airspeed_m_s;

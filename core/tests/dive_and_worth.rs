@@ -84,6 +84,10 @@ fn the_dive_follows_limit_rpm_and_pitch() {
         PitchControl::ConstantSpeed { rpm: 2800.0, turn_min_deg: -5.0, turn_max_deg: 4.0 };
     let (coarse, stop) = (dive_m_s(&coarser).unwrap(), dive_m_s(&governed).unwrap());
     assert!((coarse / stop - 1.0).abs() < 1e-9);
+    // So does one that holds just the limit rpm.
+    governed.propeller.pitch_control =
+        PitchControl::ConstantSpeed { rpm: 3300.0, turn_min_deg: -5.0, turn_max_deg: 4.0 };
+    assert!((dive_m_s(&governed).unwrap() / coarse - 1.0).abs() < 1e-9);
     assert!(dive_m_s(&demo(1)).is_none(), "the motor names no limit rpm");
 }
 
@@ -156,4 +160,21 @@ fn where_nothing_is_to_be_gained_none_is_told() {
         PitchControl::ConstantSpeed { rpm: 2800.0, turn_min_deg: -5.0, turn_max_deg: 4.0 };
     let full = point(Some(30.0), Setting::FullThrottle {});
     assert!(pitch_worth(&Rig::new(&job).unwrap(), &full).is_none());
+}
+
+/// Blades that stand so far off that the best lies beyond 15° finer or 25° coarser: the best is that end, and
+/// said to be; a best between is not.
+#[test]
+fn a_best_turn_at_the_end_of_the_search_is_said_to_be() {
+    let fast = point(Some(45.0), Setting::FullThrottle {});
+    let still = point(Some(0.0), Setting::FullThrottle {});
+    for (stands, p, end) in
+        [(30.0, &still, Some(15.0)), (-30.0, &fast, Some(-5.0)), (3.0, &still, None), (3.0, &fast, None)]
+    {
+        let mut job = demo(0);
+        job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg: stands };
+        let worth = pitch_worth(&Rig::new(&job).unwrap(), p).unwrap();
+        assert_eq!(worth.at_end_of_search, end.is_some(), "{worth:?}");
+        assert!(end.is_none_or(|end| (worth.turn_deg.unwrap() - end).abs() < 1e-9), "{worth:?}");
+    }
 }

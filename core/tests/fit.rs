@@ -280,6 +280,19 @@ fn at_the_limit_rpm_an_engine_gives_what_it_gives_there() {
     }
 }
 
+/// Past its limit, where the curve goes on, an engine is taken for no more than it gives up to the limit.
+#[test]
+fn past_the_limit_rpm_an_engine_is_taken_for_the_most_it_gives_up_to_it() {
+    let mut job = demo(0);
+    let Some(Engine::Piston(engine)) = &mut job.engine else { panic!("a piston engine") };
+    engine.max_rpm = Some(2800.0);
+    let rig = Rig::new(&job).unwrap();
+    let air = Air::standard(0.0, 0.0).unwrap();
+    let at = Condition { air, airspeed_m_s: 40.0, rotation_rad_s: rotation_rad_s(2900.0), turn_rad: 0.0 };
+    // The curve has 53 kW at 2800 rpm and rises; the density at sea level is 1.5e-8 above the nominal one.
+    near(Some(spare(&rig, &at, 30_000.0).unwrap().given_w), 53_000.0, 1e-7);
+}
+
 /// Offer and demand over rpm of a geared engine at height, each by its own law.
 #[test]
 fn the_offer_is_the_engines_at_each_rpm_in_both_airs() {
@@ -314,6 +327,8 @@ fn the_offer_is_the_engines_at_each_rpm_in_both_airs() {
         // An element's balance is sought, so that the last digits of the rpm count: 2e-8 comes out.
         near(Some(o.taken_w), rig.rotor.loads(&at).torque_n_m * rotation_rad_s, 1e-7);
     }
+    // 2000 of the propeller are 2500 of the engine.
+    near(at(&job, Some(35.0), Setting::Rpm { rpm: 2000.0 }).meeting.engine_rpm, 2500.0, 1e-12);
     // Two are the least that make a line: the ends.
     let ends: Vec<f64> = offer(&rig, 0, 0).iter().map(|o| o.engine_rpm.round()).collect();
     assert_eq!(ends, [2000.0, 3300.0]);

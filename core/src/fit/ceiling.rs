@@ -95,3 +95,30 @@ fn uphill(speeds_m_s: Range<f64>, mut value: impl FnMut(f64) -> Option<(f64, f64
     }
     seen
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    fn looked(value: impl Fn(f64) -> Option<f64>) -> Vec<f64> {
+        uphill(10.0..60.0, |v| Some((v, value(v)?))).iter().map(|s| s.0).collect()
+    }
+
+    /// Steps of a tenth from the slowest on, three of them past a top, none past the end; speeds without an
+    /// answer before the first one do not count.
+    #[test]
+    fn speeds_are_looked_at_until_three_gain_nothing() {
+        let speed = |i: i32| 10.0 * 1.1_f64.powi(i);
+        let same = |found: &[f64], from: i32, last: i32| {
+            assert_eq!(found.len(), (last - from + 1) as usize, "{found:?}");
+            (from..=last).zip(found).for_each(|(i, v)| assert!((v - speed(i)).abs() < 1e-9, "{found:?}"));
+        };
+        same(&looked(|v| Some(-(v - speed(4)).abs())), 0, 7);
+        same(&looked(|v| (v > 15.0).then(|| -(v - speed(9)).abs())), 5, 12);
+        // 10 · 1.1^18 is 55.6, and the next lies beyond the end.
+        same(&looked(Some), 0, 18);
+        // A dip of two steps is stepped over.
+        let dips = |v: f64| Some(if (v > speed(4) + 0.1) && (v < speed(6) + 0.1) { 0.0 } else { v });
+        same(&looked(dips), 0, 18);
+    }
+}

@@ -39,3 +39,48 @@ pub(super) fn dive(rig: &Rig, at: &Condition) -> Option<Full> {
     let condition = here(search.root().ok()?.0.x);
     Some(Full { condition, loads: solver.loads(&condition), held: false })
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::job::{DEMOS, Engine, Job, PitchControl};
+
+    fn turned(turn_deg: f64, limit_rpm: f64) -> (Rig, Condition) {
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg };
+        let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+        piston.max_rpm = Some(limit_rpm);
+        let rig = Rig::new(&job).unwrap();
+        let air = crate::air::Air::standard(0.0, 0.0).unwrap();
+        let turn_rad = rig.turn_rad();
+        (rig, Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad })
+    }
+
+    /// The slowest speed, by steps of 1 m/s, at which the air drives the propeller at its limit rpm.
+    fn scanned(rig: &Rig, at: &Condition, limit_rpm: f64) -> f64 {
+        let still = run_up(rig, at, limit_rpm);
+        let driven = |v: f64| rig.rotor.loads(&Condition { airspeed_m_s: v, ..still }).torque_n_m < 0.0;
+        (0..900).map(f64::from).find(|v| driven(*v)).unwrap_or(900.0)
+    }
+
+    /// Told up to an advance ratio of 6 and to Mach 0.7, 238 m/s, and not beyond either.
+    #[test]
+    fn a_dive_is_told_as_far_as_it_is_looked_for() {
+        let (mut told, mut slow, mut fast) = (0, 0, 0);
+        for (turn_deg, limit_rpm) in
+            [(-4.0, 3300.0), (30.0, 2000.0), (40.0, 3300.0), (41.5, 1100.0), (42.5, 1100.0), (43.5, 1100.0)]
+        {
+            let (rig, at) = turned(turn_deg, limit_rpm);
+            let v = scanned(&rig, &at, limit_rpm);
+            let ratio = v / (limit_rpm / 60.0 * 1.52);
+            let found = dive(&rig, &at).map(|f| f.condition.airspeed_m_s);
+            let (within, subsonic) = (ratio < 6.0, v < 0.7 * at.air.sound_speed_m_s);
+            assert_eq!(found.is_some(), within && subsonic, "{turn_deg}: {found:?} {v} {ratio}");
+            assert!(found.is_none_or(|f| f <= v && f > v - 1.0), "{turn_deg}: {found:?} {v}");
+            told += u32::from(found.is_some());
+            slow += u32::from(!within && subsonic);
+            fast += u32::from(within && !subsonic);
+        }
+        assert!(told > 2 && slow > 0 && fast > 0, "{told} {slow} {fast}");
+    }
+}

@@ -169,4 +169,68 @@ mod tests {
         job.aircraft = None;
         assert!(level_line(&Rig::new(&job).unwrap(), &at, 60).is_empty());
     }
+
+    /// Without an engine nothing but the polar tells where level flight ends: at 1.5 times the speed of fast
+    /// cruise, with a stall beyond that at 1.05 times the stall; a multirotor's climb at 10 m/s.
+    #[test]
+    fn without_an_engine_level_flight_ends_where_the_polar_says() {
+        let ends = |job: &Job| {
+            let rig = Rig::new(job).unwrap();
+            let air = crate::air::Air::standard(0.0, 0.0).unwrap();
+            let at = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: 0.0 };
+            let line = level_line(&rig, &at, 30);
+            assert_eq!(line.len(), 30);
+            let named = match &job.aircraft {
+                Some(Aircraft::Aeroplane(a)) => Some(speeds(a, &air)),
+                _ => None,
+            };
+            (line[0].airspeed_m_s, line[29].airspeed_m_s, named)
+        };
+        let near = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 1e-12, "{a} {b}");
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        job.engine = None;
+        let (slow, fast, named) = ends(&job);
+        near(slow, named.unwrap().stall_m_s.unwrap());
+        near(fast, 1.5 * named.unwrap().fast_cruise_m_s);
+        let cl_max = |job: &mut Job, cl_max: Option<f64>| {
+            let Some(Aircraft::Aeroplane(a)) = &mut job.aircraft else { panic!("an aeroplane") };
+            a.cl_max = cl_max;
+        };
+        cl_max(&mut job, Some(0.1));
+        let (slow, fast, named) = ends(&job);
+        near(slow, named.unwrap().stall_m_s.unwrap());
+        near(fast, 1.05 * slow);
+        cl_max(&mut job, None);
+        near(ends(&job).0, 0.7 * named.unwrap().least_power_m_s);
+        let mut job = Job::from_json(DEMOS[2].json).unwrap();
+        job.engine = None;
+        let (slow, fast, _) = ends(&job);
+        assert!(slow.abs() < 1e-12 && (fast - 10.0).abs() < 1e-12, "{slow} {fast}");
+    }
+
+    /// Equal steps of speed through three conditions or more, each met; two make no curve.
+    #[test]
+    fn three_conditions_are_enough_for_a_line() {
+        let air = crate::air::Air::standard(0.0, 0.0).unwrap();
+        let node = |i: i32| {
+            let i = f64::from(i);
+            Condition {
+                air,
+                airspeed_m_s: 4.0 + 3.0 * i,
+                rotation_rad_s: 200.0 + 10.0 * i,
+                turn_rad: 0.1 * i,
+            }
+        };
+        let nodes = [node(0), node(1), node(2)];
+        let line = between(&nodes, 5).unwrap();
+        assert_eq!(line.len(), 5);
+        for (i, c) in line.iter().enumerate() {
+            let i = 0.5 * i as f64;
+            let near = |a: f64, b: f64| assert!((a - b).abs() < 1e-9, "{a} {b}");
+            near(c.airspeed_m_s, 4.0 + 3.0 * i);
+            near(c.rotation_rad_s, 200.0 + 10.0 * i);
+            near(c.turn_rad, 0.1 * i);
+        }
+        assert!(between(&nodes[..2], 5).is_none() && between(&[], 5).is_none());
+    }
 }

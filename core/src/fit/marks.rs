@@ -149,3 +149,94 @@ fn passed(points: &[EnvelopePoint], of: impl Fn(&FullThrottle) -> f64) -> Option
         .find(|w| w[0].1 < 0.0 && w[1].1 >= 0.0)
         .map(|w| w[0].0 - w[0].1 * (w[1].0 - w[0].0) / (w[1].1 - w[0].1))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::result::State;
+
+    fn full(value: f64, held_at_limit: bool) -> FullThrottle {
+        FullThrottle {
+            rpm: 2000.0,
+            held_at_limit,
+            turn_deg: 0.0,
+            thrust_n: value,
+            power_w: 1.0,
+            efficiency: None,
+            tip_mach: value,
+            rate_of_climb_m_s: Some(value),
+            climb_angle_deg: None,
+            departure_deg: Vec::new(),
+        }
+    }
+
+    fn points(values: &[(f64, Option<f64>)]) -> Vec<EnvelopePoint> {
+        let point = |&(airspeed_m_s, value): &(f64, Option<f64>)| EnvelopePoint {
+            airspeed_m_s,
+            asked_n: None,
+            full: value.map(|v| full(v, v > 0.0)),
+            full_state: State::Ok,
+            level: None,
+            level_state: State::Ok,
+        };
+        values.iter().map(point).collect()
+    }
+
+    /// A parabola over speeds of any spacing has its top where it is.
+    #[test]
+    fn the_top_of_a_parabola_is_found_exactly() {
+        let parabola = |v: f64| 7.0 - 0.3 * (v - 11.3).powi(2);
+        let known = |v: f64| (v, parabola(v));
+        assert!((vertex(known(9.0), known(11.0), known(14.0)) - 11.3).abs() < 1e-12);
+        assert!((vertex(known(11.2), known(11.5), known(30.0)) - 11.3).abs() < 1e-12);
+        // Three alike, or no top at all: the middle one.
+        assert!((vertex((1.0, 2.0), (2.0, 2.0), (4.0, 2.0)) - 2.0).abs() < 1e-12);
+        assert!((vertex((1.0, 2.0), (2.0, 1.0), (4.0, 2.0)) - 2.0).abs() < 1e-12);
+    }
+
+    fn summit(of: &dyn Fn(f64) -> f64, stall: f64, counts: bool) -> Option<Mark> {
+        let looked: Vec<_> = (0..=10).map(|i| 2.0 * f64::from(i)).map(|v| (v, Some(of(v)))).collect();
+        let line = Line {
+            points: &points(&looked),
+            slowest: Slowest { airspeed_m_s: stall, counts },
+            known: |p| p.full.as_ref(),
+            found: &|v| Some(full(of(v), false)),
+            turns: |f| (f.rpm, f.held_at_limit),
+        };
+        line.best(|f| f.rate_of_climb_m_s)
+    }
+
+    /// Below the slowest flight nothing counts, at it the figure there does, and where a point of the range
+    /// happens to lie at that speed nothing is different.
+    #[test]
+    fn the_best_is_sought_from_the_slowest_flight_on() {
+        let top_at = |top: f64| move |v: f64| 9.0 - 0.01 * (v - top).powi(2);
+        for (top, stall, expected) in
+            [(11.3, 5.0, 11.3), (11.3, 6.0, 11.3), (11.3, 12.5, 12.5), (11.3, 12.0, 12.0), (30.0, 5.0, 20.0)]
+        {
+            let found = summit(&top_at(top), stall, true).unwrap();
+            assert!((found.airspeed_m_s - expected).abs() < 1e-9, "{top} {stall}: {found:?}");
+            assert!((found.value - top_at(top)(expected)).abs() < 1e-9, "{top} {stall}: {found:?}");
+        }
+        // A stall that is not known does not count itself, nor does rest.
+        let falls = |v: f64| 9.0 - v;
+        assert!((summit(&falls, 0.0, false).unwrap().airspeed_m_s - 2.0).abs() < 1e-12);
+        assert!(summit(&falls, 0.0, true).unwrap().airspeed_m_s.abs() < 1e-12);
+        // What is nowhere above zero is no best.
+        assert!(summit(&|v| -1.0 - v, 0.0, false).is_none());
+    }
+
+    #[test]
+    fn a_value_passes_zero_on_the_line_between_two_points() {
+        let at = |values: &[(f64, Option<f64>)]| passed(&points(values), |f| f.thrust_n);
+        let rising = [(0.0, Some(-3.0)), (10.0, Some(-1.0)), (20.0, Some(3.0)), (30.0, Some(9.0))];
+        assert!((at(&rising).unwrap() - 12.5).abs() < 1e-12);
+        let again = [(0.0, Some(-3.0)), (10.0, Some(1.0)), (20.0, Some(-1.0)), (30.0, Some(9.0))];
+        assert!((at(&again).unwrap() - 7.5).abs() < 1e-12, "the first time");
+        let gap = [(0.0, Some(-3.0)), (10.0, None), (20.0, Some(3.0))];
+        assert!((at(&gap).unwrap() - 10.0).abs() < 1e-12);
+        assert_eq!(at(&[(4.0, Some(1.0)), (10.0, Some(-1.0))]), Some(4.0));
+        assert_eq!(at(&[(4.0, Some(-1.0)), (10.0, Some(-0.5))]), None);
+        assert_eq!(at(&[(4.0, None)]), None);
+    }
+}

@@ -69,3 +69,52 @@ pub fn answer(rig: &Rig, point: &FlightPoint, air: Air, near: &mut Near) -> Resu
         }
     }
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::job::{DEMOS, Job, PitchControl};
+
+    fn rig(turn_deg: f64) -> Rig {
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg };
+        Rig::new(&job).unwrap()
+    }
+
+    /// An answer that another one leads to is the answer that none leads to, whatever is asked.
+    #[test]
+    fn what_is_near_leads_to_the_answer_and_does_not_change_it() {
+        let point = |airspeed_m_s, setting| FlightPoint {
+            name: "here".into(),
+            altitude_m: 1000.0,
+            isa_offset_k: 0.0,
+            airspeed_m_s,
+            setting,
+        };
+        for p in [
+            point(None, Setting::FullThrottle {}),
+            point(Some(35.0), Setting::FullThrottle {}),
+            point(Some(40.0), Setting::Level {}),
+            point(Some(35.0), Setting::Power { power_w: 30_000.0 }),
+        ] {
+            let air = crate::rig::air_of(&p).unwrap();
+            let mut near = Near::default();
+            let mut held = 0;
+            // To where the limit rpm is passed, and back.
+            for turn_deg in [0.0, 0.3, -2.0, -4.0, -6.0, -8.0, -8.2, -5.0, 1.0] {
+                let rig = rig(turn_deg);
+                let led = answer(&rig, &p, air, &mut near).unwrap();
+                let alone = answer(&rig, &p, air, &mut Near::default()).unwrap();
+                // Two roads to one root, as along a range: 2e-6 comes out there.
+                let same = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 5e-6, "{p:?} {turn_deg}: {a} {b}");
+                same(led.condition.airspeed_m_s, alone.condition.airspeed_m_s);
+                same(led.condition.rotation_rad_s, alone.condition.rotation_rad_s);
+                same(led.loads.thrust_n, alone.loads.thrust_n);
+                same(led.loads.torque_n_m, alone.loads.torque_n_m);
+                assert_eq!(led.held, alone.held, "{p:?} {turn_deg}");
+                held += u32::from(led.held);
+            }
+            assert!(held > 0 || p.setting != Setting::FullThrottle {});
+        }
+    }
+}

@@ -98,3 +98,40 @@ fn roll(a: &Aeroplane, density_kg_m3: f64, thrust: &Curve, lift_off: f64) -> Opt
     }
     Some((distance, time))
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::job::{DEMOS, Job};
+
+    /// Constant thrust without drag rolls `V²/2a`, in `V/a`; and by energy the rest.
+    #[test]
+    fn constant_thrust_without_drag_is_the_closed_form() {
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        let Some(Aircraft::Aeroplane(a)) = &mut job.aircraft else { panic!("an aeroplane") };
+        (a.drag.cd0, a.drag.k) = (1e-9, Some(1e-9));
+        let (m, stall) = (a.mass_kg, (2.0 * a.mass_kg * G0_M_S2 / (1.225 * a.wing_area_m2 * 1.6)).sqrt());
+        let (rig, air) = (Rig::new(&job).unwrap(), Air::standard(0.0, 0.0).unwrap());
+        let told =
+            |speeds: &[f64], thrust: f64| along(&rig, &air, (speeds.to_vec(), vec![thrust; speeds.len()]));
+        let t = told(&[0.0, 20.0, 40.0], 1200.0).unwrap();
+        let v = 1.2 * stall;
+        let gain = 1200.0 / m - 0.04 * G0_M_S2;
+        // The table's density at sea level is 1.5e-8 above 1.225.
+        let near = |a: f64, b: f64| assert!((a / b - 1.0).abs() < 1e-6, "{a} {b}");
+        near(t.lift_off_m_s, v);
+        near(t.screen_m_s, 1.3 * stall);
+        near(t.ground_roll_m, v * v / (2.0 * gain));
+        near(t.ground_roll_s, v / gain);
+        let height = 15.0 + ((1.3 * stall).powi(2) - v * v) / (2.0 * G0_M_S2);
+        near(t.distance_to_15_m - t.ground_roll_m, height * m * G0_M_S2 / 1200.0);
+        near(t.rolling_friction, 0.04);
+        // Friction is 169 N: with less nothing rolls.
+        assert!(told(&[0.0, 20.0, 40.0], 168.0).is_none());
+        // Thrust must be known from rest to 1.3 of the stall, 25.1 m/s.
+        assert!(told(&[0.0, 20.0, 25.2], 1200.0).is_some());
+        assert!(told(&[0.0, 20.0, 25.0], 1200.0).is_none());
+        assert!(told(&[1.0, 20.0, 40.0], 1200.0).is_none());
+        assert!(told(&[], 1200.0).is_none());
+    }
+}

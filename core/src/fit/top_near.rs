@@ -141,3 +141,6 @@ fn sound(rig: &Rig, at: &Condition, loads: &Loads, held: bool, &[[a, b], [c, d]]
     };
     within && falls && met
 }
+
+#[cfg(test)]
+mod tests;

@@ -117,3 +117,40 @@ fn uphill(known: &dyn Fn(f64) -> Option<Turned>, stands: Option<Turned>, end_deg
     }
     best
 }
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+
+    /// The top of a smooth figure to the last halving, 2.5°/64, from either side; at an end that end.
+    #[test]
+    fn the_best_turn_is_the_top_of_a_figure_or_the_end_of_the_search() {
+        for (top, expected) in [(3.3, 3.3), (-7.9, -7.9), (0.02, 0.02), (-40.0, -15.0), (60.0, 25.0)] {
+            let figure = |turn: f64| Some(100.0 - (turn - top).powi(2));
+            let (turn, value) = highest(&figure).unwrap();
+            assert!((turn - expected).abs() < 0.5 * STEP_DEG / 64.0 + 1e-9, "{top}: {turn}");
+            assert!((value - figure(turn).unwrap()).abs() < 1e-12);
+        }
+        assert!(highest(&|_| None).is_none());
+        // Where there is no answer as the blades stand, the first one on the way counts.
+        let later = |turn: f64| (turn > 11.0).then(|| 100.0 - (turn - 14.0).powi(2));
+        assert!((highest(&later).unwrap().0 - 14.0).abs() < 0.05);
+    }
+
+    /// Four steps that gain nothing end a side; three do not.
+    #[test]
+    fn a_dip_is_stepped_over_only_where_it_is_short() {
+        let after =
+            |far: f64| move |turn: f64| Some((turn, if turn >= far { 2.0 } else { 1.0 - 0.01 * turn }));
+        let best = |far: f64| uphill(&after(far), Some((0.0, 1.0)), COARSEST_DEG).unwrap().0;
+        assert!((best(4.0 * STEP_DEG) - 4.0 * STEP_DEG).abs() < 1e-9);
+        assert!(best(5.0 * STEP_DEG).abs() < 1e-9);
+        let looked = std::cell::Cell::new(0.0_f64);
+        let rises = |turn: f64| {
+            looked.set(looked.get().min(turn));
+            Some((turn, -turn))
+        };
+        let found = uphill(&rises, None, FINEST_DEG).unwrap();
+        assert!((found.0 - FINEST_DEG).abs() < 1e-9 && (looked.get() - FINEST_DEG).abs() < 1e-9);
+    }
+}

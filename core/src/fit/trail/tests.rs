@@ -54,15 +54,20 @@ fn a_guess_is_the_polynomial_through_the_last_answers() {
 /// A guess within a thousandth of the range earns trust, one farther off loses it.
 #[test]
 fn the_last_guess_decides_whether_the_next_is_trusted() {
-    let mut trail = Trail::default();
-    trail.push(&met(10.0, 2000.0));
-    assert!(!trail.trusted);
-    for (x, trusted) in [(2000.9, true), (2005.0, false), (2009.0, true)] {
-        let off = (guessed(&trail, 11.0) - x).abs();
-        trail = Trail { past: vec![(10.0, met(10.0, 2000.0))], ..Trail::default() };
-        trail.push(&met(11.0, if trusted { 2000.0 + 0.9 } else { 2000.0 - 1.1 }));
-        assert_eq!(trail.trusted, trusted, "{off}");
+    // The range is 1000 wide, and one answer alone guesses itself.
+    for (x, trusted) in [(2000.9, true), (1999.1, true), (2001.1, false), (1998.9, false)] {
+        let mut trail = Trail::default();
+        trail.push(&met(10.0, 2000.0));
+        assert!(!trail.trusted);
+        trail.push(&met(11.0, x));
+        assert_eq!(trail.trusted, trusted, "{x}");
     }
+}
+
+#[test]
+fn answers_found_at_once_are_counted_until_one_is_measured() {
+    let mut trail = Trail::default();
+    trail.push(&met(11.0, 2000.0));
     assert_eq!(trail.unmeasured, 0);
     trail.push(&Met { measured: false, ..met(12.0, 2000.0) });
     trail.push(&Met { measured: false, ..met(13.0, 2000.0) });
