@@ -2,7 +2,10 @@
 
 use crate::bench::{bench, demo};
 use spokeshave::bench::Fault;
-use spokeshave::job::{Flange, Hub, Job, Making, Wood};
+use spokeshave::job::{Flange, Hub, Job, Limits, LinePoint, Making, Wishes, Wood};
+use spokeshave::result::Limit;
+use spokeshave::rig::Rig;
+use spokeshave::shape::kept;
 
 #[test]
 fn what_cannot_be_made_is_said_with_its_place_and_its_amount() {
@@ -115,5 +118,47 @@ fn a_trailing_edge_too_thick_for_its_chord_is_refused_at_every_such_station() {
         assert!((most_mm - 0.05 * chord_mm).abs() < 1e-9 && wanted_mm > most_mm, "{fault:?}");
         assert!((wanted_mm - 1e3 * wanted_m).abs() < 1e-9 && *radius_mm > 100.0, "{fault:?}");
         assert!(fault.to_string().contains("least trailing edge"), "{fault}");
+    }
+}
+
+/// A blank of the size that a limit on it tells is thick and wide enough, one a little smaller is not; edges
+/// and tip are rounded in one of the two alone, which takes a millimetre.
+#[test]
+fn the_blank_that_a_limit_speaks_of_is_the_one_the_blades_are_cut_from() {
+    let swept = |job: &mut Job| {
+        let line = [(0.2, 0.0, 0.0), (1.0, 0.02, 0.01)];
+        let line =
+            line.map(|(radius_fraction, sweep_m, rake_m)| LinePoint { radius_fraction, sweep_m, rake_m });
+        job.bench = Some(Making { stacking_line: line.to_vec(), ..Making::default() });
+    };
+    let ahead = |job: &mut Job| {
+        job.bench = Some(Making { stacking_fraction: Some(0.25), ..Making::default() });
+    };
+    let bare = |job: &mut Job| job.wood = None;
+    let small_hub = |job: &mut Job| {
+        (job.wood, job.propeller.hub_diameter_m) = (None, 0.04);
+    };
+    let leaning = |job: &mut Job| job.wood = Some(Wood { rake_deg: 2.0, ..Wood::default() });
+    let changes: [&dyn Fn(&mut Job); 6] = [&|_| (), &swept, &ahead, &bare, &small_hub, &leaning];
+    for (i, change) in changes.into_iter().enumerate() {
+        let mut job = demo(0);
+        change(&mut job);
+        let limits =
+            Limits { blank_width_most_m: Some(1.0), blank_depth_most_m: Some(1.0), ..Limits::default() };
+        job.wishes = Some(Wishes { limits, ..Wishes::default() });
+        let margins = kept(&Rig::new(&job).unwrap());
+        let told = |limit| margins.iter().find(|m| m.limit == limit).and_then(|m| m.found).unwrap();
+        let (width, depth) = (told(Limit::BlankWidthMost), told(Limit::BlankDepthMost));
+        let mut cut = |width: f64, depth: f64| {
+            let making = job.bench.get_or_insert_default();
+            (making.blank_width_m, making.blank_thickness_m) = (Some(width), Some(depth));
+            bench(&job).err().map(|e| e.0).unwrap_or_default()
+        };
+        let enough = cut(width + 1e-3, depth + 1e-3);
+        assert!(enough.is_empty(), "{i}: {width} {depth} {enough:?}");
+        let narrow = cut(width - 1e-3, depth + 1e-3);
+        assert!(matches!(narrow[..], [Fault::WiderThanBlank { .. }]), "{i}: {width} {narrow:?}");
+        let thin = cut(width + 1e-3, depth - 1e-3);
+        assert!(matches!(thin[..], [Fault::ThickerThanBlank { .. }]), "{i}: {depth} {thin:?}");
     }
 }

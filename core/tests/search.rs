@@ -74,7 +74,8 @@ fn limits_are_kept_and_cost_something() {
         shaft_height_m: Some(1.0),
         ground_clearance_m: Some(0.23),
         rpm: vec![RpmLimit { flight_point: "Cruise".into(), least: None, most: Some(2500.0) }],
-        blank_depth_most_m: Some(0.08),
+        // That of the boss.
+        blank_depth_most_m: Some(0.09),
         ..Limits::default()
     };
     let bound = Wish { limits, ..free.clone() };

@@ -1,6 +1,7 @@
 //! How far the limits of the finished propeller are kept.
 
 use super::brief::{Look, look};
+use super::wood_size::blank_m;
 use crate::fit::Near;
 use crate::job::{FlightPoint, Limits, Setting};
 use crate::result::{Brief, Limit, Margin};
@@ -46,15 +47,13 @@ pub(super) fn margins(
     if let (Some(least), Some(b)) = (limits.standing_rpm_least, standing) {
         all.push(at_least(Limit::StandingRpmLeast, Some(b.name.clone()), b.rpm, least));
     }
-    let (width_m, depth_m) = blank_m(rig);
+    let wood = limits.blank_width_most_m.or(limits.blank_depth_most_m).map(|_| blank_m(rig)).unzip();
     let blade = [
-        (Limit::DiameterMost, rig.job.propeller.diameter_m, limits.greatest_diameter_m()),
-        (Limit::BlankWidthMost, width_m, limits.blank_width_most_m),
-        (Limit::BlankDepthMost, depth_m, limits.blank_depth_most_m),
+        (Limit::DiameterMost, Some(rig.job.propeller.diameter_m), limits.greatest_diameter_m()),
+        (Limit::BlankWidthMost, wood.0, limits.blank_width_most_m),
+        (Limit::BlankDepthMost, wood.1, limits.blank_depth_most_m),
     ];
-    all.extend(
-        blade.into_iter().filter_map(|(limit, found, most)| Some(at_most(limit, None, Some(found), most?))),
-    );
+    all.extend(blade.into_iter().filter_map(|(limit, found, most)| Some(at_most(limit, None, found, most?))));
     all.extend(beam.and_then(|beam| stress(rig, limits, beam)));
     all
 }
@@ -106,16 +105,4 @@ pub(super) fn at_most(limit: Limit, flight_point: Option<String>, found: Option<
 pub(super) fn at_least(limit: Limit, flight_point: Option<String>, found: Option<f64>, least: f64) -> Margin {
     let share = found.map_or(NO_FIGURE, |f| f / least - 1.0);
     Margin { limit, flight_point, found, allowed: Some(least), share }
-}
-
-/// Width and depth of the box round every station: chord line and thickness laid across one another, on the
-/// safe side.
-fn blank_m(rig: &Rig) -> (f64, f64) {
-    let blade = &rig.rotor.blade;
-    blade.station_radii_m().map(|r| blade.cut(r)).fold((0.0, 0.0), |(width, depth), cut| {
-        let (s, c) = cut.angle_rad.sin_cos();
-        let t = cut.thickness_ratio;
-        let side = |a: f64, b: f64| cut.chord_m * (a.abs() + t * b.abs());
-        (f64::max(width, side(c, s)), f64::max(depth, side(s, c)))
-    })
 }

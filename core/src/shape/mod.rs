@@ -15,6 +15,7 @@ mod limits;
 mod search;
 mod twist;
 mod variant;
+mod wood_size;
 
 pub use brief::{brief, briefs, figure_at};
 pub use chart::{MOST_CHART_STEPS, PitchBy, pitch_diameter, sized};

@@ -38,7 +38,7 @@ pub mod node {
     pub const OPENER: &str = "page-opener";
     /// The JavaScript side of the opener.
     pub const OPENER_GLUE: &str = "page-opener-glue";
-    /// The WebAssembly module, LZMA in base 85.
+    /// The WebAssembly module, LZMA in base 91.
     pub const ENGINE: &str = "page-engine";
     /// The JavaScript side of the WebAssembly module.
     pub const GLUE: &str = "page-glue";

@@ -16,7 +16,7 @@ pub struct Parts<'a> {
     pub opener: &'a str,
     /// The JavaScript side of the opener.
     pub opener_glue: &'a str,
-    /// The WebAssembly module, LZMA in base 85.
+    /// The WebAssembly module, LZMA in base 91.
     pub engine: &'a str,
     /// The JavaScript side of the WebAssembly module, gzip in base64.
     pub glue: &'a str,

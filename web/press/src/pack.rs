@@ -21,8 +21,7 @@ pub(crate) struct Packed {
 pub(crate) fn pack(modules: &Modules, style: &str) -> Result<Packed> {
     let (glue, wasm) = bind(&modules.page, "wasm_bindgen")?;
     let (opener_glue, opener) = bind(&modules.opener, "page_opener")?;
-    // A script node must not hold `<` before some other letters; the opener puts it back.
-    let engine = base85::encode(&lzma(&wasm)?).replace('<', ",");
+    let engine = String::from_utf8(base91::slice_encode(&lzma(&wasm)?))?;
     let opener = BASE64_STANDARD.encode(gzip(&opener)?);
     let glue = BASE64_STANDARD.encode(gzip(glue.as_bytes())?);
     let boot = BOOT_SCRIPTS.concat();

@@ -83,10 +83,10 @@ pub struct Limits {
     /// What is to be left between tip and ground, m.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub ground_clearance_m: Option<f64>,
-    /// Greatest width of the blade in the plane of rotation, m: that of the blank.
+    /// Greatest width of the blank that blades and boss need in the plane of rotation, m, nothing left over.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub blank_width_most_m: Option<f64>,
-    /// Greatest depth of the blade along the axis, m: the thickness of the blank.
+    /// Greatest thickness of the blank that blades and boss need along the axis, m, nothing left over.
     #[serde(skip_serializing_if = "Option::is_none")]
     pub blank_depth_most_m: Option<f64>,
     /// Least stress margin anywhere on the blade, limit over stress less 1; only where the job names its

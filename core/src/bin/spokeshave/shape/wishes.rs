@@ -32,10 +32,10 @@ pub(super) struct LimitArgs {
     /// What is to be left between tip and ground, mm
     #[arg(long, value_name = "MM")]
     ground_clearance_mm: Option<f64>,
-    /// Width of the blank, mm
+    /// Width of the blank that blades and boss need, mm
     #[arg(long, value_name = "MM")]
     blank_width_mm: Option<f64>,
-    /// Thickness of the blank, mm
+    /// Thickness of the blank that blades and boss need, mm
     #[arg(long, value_name = "MM")]
     blank_thickness_mm: Option<f64>,
     /// Least stress margin, limit over stress less 1; needs a job that names its wood
