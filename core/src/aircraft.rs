@@ -37,6 +37,12 @@ pub fn weight_n(aircraft: &Aircraft) -> f64 {
         }
 }
 
+/// Whether the weight hangs on the thrust, not on a wing.
+#[must_use]
+pub fn hovers(aircraft: Option<&Aircraft>) -> bool {
+    matches!(aircraft, Some(Aircraft::Multirotor(_)))
+}
+
 /// How many propellers share the work.
 #[must_use]
 pub fn propellers(aircraft: &Aircraft) -> f64 {

@@ -34,9 +34,12 @@ pub fn figure(units: Units, quantity: Quantity, si: Option<f64>) -> String {
             text.trim_end_matches('0').trim_end_matches('.').into()
         }
         // From a palm-size rotor to a light aeroplane: five orders of size.
-        Quantity::Force | Quantity::Grading | Quantity::Torque | Quantity::Power | Quantity::Distance => {
-            significant(shown, 3)
-        }
+        Quantity::Force
+        | Quantity::Grading
+        | Quantity::TorqueGrading
+        | Quantity::Torque
+        | Quantity::Power
+        | Quantity::Distance => significant(shown, 3),
         _ => fixed(shown, units.decimals(quantity)),
     }
 }

@@ -65,7 +65,8 @@ fn BladeDrawings(shown: &Shown) -> Html {
             <BladeStrip {shape} stations={all.clone()} {length} {selected} on_select={on_select.clone()} />
             if let Some(station) = all.get(selected) {
                 <StationCard station={station.clone()} index={selected} count={all.len()} airspeed_m_s={point.airspeed_m_s}
-                    rpm={point.rpm} {outline} lift_to_drag={curve} {length} speed={Unit::KM_H} {on_select} />
+                    rpm={point.rpm} {outline} lift_to_drag={curve} {length} speed={Unit::KM_H}
+                    thrust={Unit { name: "N/m", ..Unit::ratio(0) }} torque={Unit { name: "N m/m", ..Unit::ratio(0) }} {on_select} />
             }
         </>
     }

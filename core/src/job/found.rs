@@ -34,7 +34,7 @@ impl Found {
             let unit = if unit.is_empty() { String::new() } else { format!(" {unit}") };
             self.refuse(
                 path,
-                value,
+                told(value),
                 format!("{} to {}{unit}", short(*range.start(), &range), short(*range.end(), &range)),
             );
             self.within(*range.start(), *range.end());
@@ -57,6 +57,15 @@ impl Found {
         if !range.contains(&found) {
             self.refuse(path.into(), found, format!("{} to {}", range.start(), range.end()));
         }
+    }
+}
+
+/// A value as it stands in a job file; in powers of ten where nobody would count its digits.
+fn told(value: f64) -> String {
+    if value != 0.0 && !(1e-9..1e15).contains(&value.abs()) {
+        format!("{value:e}")
+    } else {
+        value.to_string()
     }
 }
 

@@ -40,6 +40,7 @@ fn each_wrong_value_is_named_by_its_path() {
         ("/propeller/stations/3/thickness_ratio", json!(0.0), "propeller.stations[3].thickness_ratio: 0"),
         ("/propeller/stations", json!([]), "propeller.stations: 0"),
         ("/propeller/hub_diameter_m", json!(1.6), "propeller.hub_diameter_m: 1.6"),
+        ("/propeller/diameter_m", json!(1e308), "propeller.diameter_m: 1e308"),
         ("/propeller/blades", json!(0), "propeller.blades: 0"),
         ("/propeller/pitch_control", json!({"kind": "magic"}), "propeller.pitch_control"),
         (

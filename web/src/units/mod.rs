@@ -27,6 +27,8 @@ pub enum Quantity {
     Force,
     /// Force for each metre of radius, N/m.
     Grading,
+    /// Torque for each metre of radius, N m/m.
+    TorqueGrading,
     /// Torque, N m.
     Torque,
     /// Power, W.
@@ -135,6 +137,8 @@ impl Units {
             Quantity::Grading if self.force == ForceUnit::PoundForce => "lbf/ft",
             Quantity::Grading if self.force == ForceUnit::KilogramForce => "kgf/m",
             Quantity::Grading => "N/m",
+            Quantity::TorqueGrading if self.torque == TorqueUnit::PoundFoot => "lbf ft/ft",
+            Quantity::TorqueGrading => "N m/m",
             Quantity::Torque => self.torque.symbol(),
             Quantity::Power => self.power.symbol(),
             Quantity::Stress if self.force == ForceUnit::PoundForce => "psi",

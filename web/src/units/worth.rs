@@ -93,7 +93,10 @@ pub(super) fn worth(units: Units, quantity: Quantity) -> f64 {
         Quantity::Climb if units.height == HeightUnit::Foot => foot_m() / 60.0,
         Quantity::Grading if units.force == ForceUnit::PoundForce => force_n(units.force) / foot_m(),
         Quantity::Force | Quantity::Grading => force_n(units.force),
-        Quantity::Torque => torque_n_m(units.torque),
+        Quantity::TorqueGrading if units.torque == TorqueUnit::PoundFoot => {
+            torque_n_m(units.torque) / foot_m()
+        }
+        Quantity::Torque | Quantity::TorqueGrading => torque_n_m(units.torque),
         Quantity::Power => power_w(units.power),
         Quantity::Mass | Quantity::FuelFlow => mass_kg(units.mass),
         Quantity::Area => area_m2(units.area),

@@ -2,7 +2,8 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::{Aircraft, FlightPoint, Job, Setting};
+use spokeshave::aircraft::hovers;
+use spokeshave::job::{FlightPoint, Job, Setting};
 use spokeshave::result::{PointResult, State as Answer};
 use wasm_bindgen::JsCast;
 use web_sys::{HtmlElement, js_sys};
@@ -12,6 +13,11 @@ use crate::act::{Seen, use_act};
 use crate::number::with_unit;
 use crate::state::Action;
 use crate::units::{Quantity, Units};
+
+/// What is flown at part throttle, as a line over speed.
+pub fn flown_line(job: &Job) -> &'static str {
+    if hovers(job.aircraft.as_ref()) { "hover and climb" } else { "level flight" }
+}
 
 /// Properties of [`Chips`].
 #[derive(Properties, PartialEq)]
@@ -78,7 +84,7 @@ fn focus_sibling(event: &KeyboardEvent, to: usize) {
 /// The flight point in a sentence: its setting, height and what comes of it, or why there is no answer.
 #[must_use]
 pub fn sentence(units: Units, job: &Job, point: &FlightPoint, result: Option<&PointResult>) -> String {
-    let hovers = matches!(job.aircraft, Some(Aircraft::Multirotor(_)));
+    let hovers = hovers(job.aircraft.as_ref());
     match result {
         Some(r) if r.state != Answer::Ok => r.state.sentence().to_string(),
         _ => format!(

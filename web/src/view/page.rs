@@ -2,7 +2,8 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::{Aircraft, Limits};
+use spokeshave::aircraft::hovers;
+use spokeshave::job::Limits;
 use yew::prelude::*;
 
 use super::bench::{self, BenchPanel};
@@ -170,7 +171,11 @@ fn Panels(props: &PageProps) -> Html {
 
 fn against(props: &PageProps) -> Against {
     let limits = props.state.job().wishes.as_ref().map_or_else(Limits::default, |w| w.limits.clone());
-    Against { limits, engine_rpm: limit_rpm(&props.later) }
+    Against {
+        limits,
+        engine_rpm: limit_rpm(&props.later),
+        hovers: hovers(props.state.job().aircraft.as_ref()),
+    }
 }
 
 fn limit_rpm(later: &Later) -> Option<f64> {
@@ -178,9 +183,8 @@ fn limit_rpm(later: &Later) -> Option<f64> {
 }
 
 fn same_points(a: &State, b: &State) -> bool {
-    let hovers = |s: &State| matches!(s.job().aircraft, Some(Aircraft::Multirotor(_)));
     a.job().flight_points == b.job().flight_points
-        && hovers(a) == hovers(b)
+        && hovers(a.job().aircraft.as_ref()) == hovers(b.job().aircraft.as_ref())
         && a.drafts == b.drafts
         && a.point == b.point
         && a.units == b.units

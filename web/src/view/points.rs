@@ -2,7 +2,8 @@
 
 use std::rc::Rc;
 
-use spokeshave::job::{Aircraft, FlightPoint};
+use spokeshave::aircraft::hovers;
+use spokeshave::job::FlightPoint;
 use spokeshave::result::{PointResult, State as Answer};
 use yew::prelude::*;
 
@@ -111,7 +112,7 @@ fn PointRow(props: &PointRowProps) -> Html {
     let messages = boxes.iter().filter(|s| s.message.is_some());
     let messages = messages.map(|s| html! { <Message shown={s.clone()} named=true /> }).collect::<Html>();
     let wrong = boxes.iter().any(|s| s.message.is_some());
-    let hovers = matches!(state.job().aircraft, Some(Aircraft::Multirotor(_)));
+    let hovers = hovers(state.job().aircraft.as_ref());
     html! {
         <>
             <tr class={classes!((i == state.point).then_some("selected"))}>

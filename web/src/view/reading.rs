@@ -4,13 +4,13 @@ use std::rc::Rc;
 
 use spokeshave::drawn::DrawnStation;
 use spokeshave::fit::Along;
-use spokeshave::job::{Aircraft, Rotation, Section};
+use spokeshave::job::{Rotation, Section};
 use spokeshave::result::{PointResult, StationResult};
 use spokeshave::rotor::DepartureMap;
 use spokeshave::section::library;
 use yew::prelude::*;
 
-use super::chips::{Chips, air_words, sentence};
+use super::chips::{Chips, air_words, flown_line, sentence};
 use super::page::PageProps;
 use super::room::{Room, use_room};
 use super::verdict::Brief;
@@ -161,10 +161,7 @@ fn same_map(a: &State, b: &State) -> bool {
 
 /// What the map follows, to pick from; nothing where there is no choice.
 fn along(act: &Act, state: &State) -> Html {
-    let level = match state.job().aircraft {
-        Some(Aircraft::Multirotor(_)) => "hover and climb",
-        _ => "level flight",
-    };
+    let level = flown_line(state.job());
     let all = [(Along::FullThrottle, "full throttle"), (Along::Level, level)];
     if state.job().aircraft.is_none() && state.along == Along::FullThrottle {
         return html! {};
@@ -253,6 +250,8 @@ pub fn StationReading(props: &PageProps) -> Html {
                 airspeed_m_s={point.airspeed_m_s}
                 rpm={point.rpm} {outline} lift_to_drag={now.lift_to_drag.clone()}
                 length={state.units.unit(Quantity::Length)} speed={state.units.unit(Quantity::Speed)}
+                thrust={state.units.unit(Quantity::Grading)}
+                torque={state.units.unit(Quantity::TorqueGrading)}
                 on_select={act.on(Action::SelectStation)} />
         </div>
     }

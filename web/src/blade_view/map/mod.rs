@@ -164,7 +164,7 @@ fn advance_axis(frame: &Frame, props: &DepartureChartProps, most: usize) -> Html
     let y = frame.axis.hub_px + 26.0;
     let ticks = placed(&Linear::new((0.0, greatest), (0.0, 1.0)), &props.length, most);
     let at = |(_, tick): (f64, crate::chart::ticks::Tick)| {
-        Some((frame.x_of_advance(props.length.si(tick.at))?, tick)).filter(|(x, _)| *x < frame.right - 84.0)
+        Some((frame.x_of_advance(props.length.si(tick.at))?, tick)).filter(|(x, _)| *x < frame.right - 94.0)
     };
     let ticks: Vec<_> = ticks.into_iter().filter_map(at).collect();
     let name = format!("{} per turn", props.length.name);

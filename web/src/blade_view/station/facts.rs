@@ -1,11 +1,12 @@
 //! Eight figures of a station.
 
 use crate::chart::number::{NONE, fixed, significant};
+use crate::chart::unit::Unit;
 use spokeshave::result::StationResult;
 use yew::prelude::*;
 
 /// The facts under the drawings, and what is worth noting about them.
-pub(super) fn facts(station: &StationResult) -> Html {
+pub(super) fn facts(station: &StationResult, thrust: Unit, torque: Unit) -> Html {
     let s = station;
     let figure = |value: Option<f64>, decimals| value.map(|v| fixed(v, decimals));
     let rows = [
@@ -13,8 +14,8 @@ pub(super) fn facts(station: &StationResult) -> Html {
         ("Mach", Some(fixed(s.mach, 2)), ""),
         ("lift coeff.", figure(s.cl, 2), ""),
         ("drag coeff.", s.cd.map(|cd| significant(cd, 3)), ""),
-        ("thrust", Some(significant(s.thrust_n_per_m, 3)), "N/m"),
-        ("torque", Some(significant(s.torque_n_m_per_m, 3)), "N m/m"),
+        ("thrust", Some(significant(thrust.of(s.thrust_n_per_m), 3)), thrust.name),
+        ("torque", Some(significant(torque.of(s.torque_n_m_per_m), 3)), torque.name),
         ("loss factor", figure(s.loss_factor, 2), ""),
         ("of best L/D", figure(s.share_of_best.map(|share| 100.0 * share), 0), "%"),
     ];

@@ -40,6 +40,10 @@ pub struct StationCardProps {
     pub length: Unit,
     /// Unit of speed.
     pub speed: Unit,
+    /// Unit of thrust for a length of radius.
+    pub thrust: Unit,
+    /// Unit of torque for a length of radius.
+    pub torque: Unit,
     /// Told the index of the station to show.
     pub on_select: Callback<usize>,
 }
@@ -61,7 +65,7 @@ pub fn StationCard(props: &StationCardProps) -> Html {
                 { ledger::ledger(station) }
             </div>
             <lift_drag::LiftDrag station={station.clone()} curve={props.lift_to_drag.clone()} />
-            { facts::facts(station) }
+            { facts::facts(station, props.thrust, props.torque) }
         </article>
     }
 }

@@ -4,7 +4,7 @@ use spokeshave::result::{CaseFigures, Strength};
 use yew::prelude::*;
 
 use crate::number::{NO_FIGURE, figure, fixed, signed, significant, with_unit};
-use crate::units::{Quantity, Units};
+use crate::units::{LengthUnit, MassUnit, Quantity, Units};
 use crate::view::verdict::Cell;
 
 /// Properties of [`Figures`].
@@ -57,10 +57,47 @@ fn cells(sheet: &Strength, units: Units) -> [Cell; 4] {
         },
         Cell {
             name: "Static moment of one blade",
-            figure: fixed(1e3 * mass.static_moment_kg_m, if mass.static_moment_kg_m < 0.01 { 2 } else { 1 }),
-            unit: "kg mm",
-            more: format!("inertia of all {} kg m²", significant(mass.inertia_kg_m2, 3)),
+            figure: moment(units, mass.static_moment_kg_m),
+            unit: match (units.mass, units.length) {
+                (MassUnit::Kilogram, LengthUnit::Millimetre) => "kg mm",
+                (MassUnit::Kilogram, LengthUnit::Inch) => "kg in",
+                (MassUnit::Pound, LengthUnit::Millimetre) => "lb mm",
+                (MassUnit::Pound, LengthUnit::Inch) => "lb in",
+            },
+            more: inertia(units, mass.inertia_kg_m2),
             gauge: None,
         },
     ]
+}
+
+/// A mass times its arm, kg m, in the units of mass and length.
+fn moment(units: Units, kg_m: f64) -> String {
+    let shown = units.shown(Quantity::Mass, units.shown(Quantity::Length, kg_m));
+    fixed(shown, if shown.abs() < 10.0 { 2 } else { 1 })
+}
+
+/// A mass times the square of its arm, kg m², in the units of mass and height.
+fn inertia(units: Units, kg_m2: f64) -> String {
+    let height = |v| units.shown(Quantity::Height, v);
+    let shown = units.shown(Quantity::Mass, height(height(kg_m2)));
+    let [mass, height] = [Quantity::Mass, Quantity::Height].map(|q| units.symbol(q));
+    format!("inertia of all {} {mass} {height}²", significant(shown, 3))
+}
+
+#[cfg(test)]
+mod tests {
+    use super::*;
+    use crate::units::HeightUnit;
+
+    /// 1 kg m is 1000 kg mm, or 1 / (0.45359237 × 0.0254) lb in; 1 kg m² is 1 / (0.45359237 × 0.3048²) lb ft².
+    #[test]
+    fn moments_follow_the_units_of_mass_and_length() {
+        let metric = Units::default();
+        let pounds =
+            Units { mass: MassUnit::Pound, length: LengthUnit::Inch, height: HeightUnit::Foot, ..metric };
+        assert_eq!(moment(metric, 0.0021), "2.10");
+        assert_eq!(moment(pounds, 1.0), "86.8");
+        assert_eq!(inertia(metric, 0.167), "inertia of all 0.167 kg m²");
+        assert_eq!(inertia(pounds, 1.0), "inertia of all 23.7 lb ft²");
+    }
 }

@@ -9,7 +9,8 @@ mod stations;
 
 use std::rc::Rc;
 
-use spokeshave::result::{Finding, Strength};
+use spokeshave::result::{Finding, Governing, Strength};
+use spokeshave::wood::{Say, sentence};
 use yew::prelude::*;
 
 use super::caution;
@@ -17,7 +18,7 @@ use crate::act::Seen;
 use crate::number::{signed, with_unit};
 use crate::results::Sheet;
 use crate::state::State;
-use crate::units::Quantity;
+use crate::units::{Quantity, Units};
 use cases::{Cases, HubTable, Near};
 use charts::Charts;
 use figures::Figures;
@@ -82,7 +83,7 @@ fn told(state: &Seen, sheet: &Strength) -> Html {
     let units = state.units;
     html! {
         <>
-            { decides(sheet) }
+            { decides(sheet, units) }
             <Figures sheet={sheet.clone()} {units} />
             <Charts sheet={sheet.clone()} {units} />
             <Stations stations={sheet.stations.clone()} {units} selected={state.station} />
@@ -98,9 +99,16 @@ fn told(state: &Seen, sheet: &Strength) -> Html {
 }
 
 /// Whether it holds and what was not judged, then what decides with the reason of its limit.
-fn decides(sheet: &Strength) -> Html {
+fn decides(sheet: &Strength, units: Units) -> Html {
     let over = matches!(sheet.verdict.finding, Finding::OverTheLimit | Finding::NotJudged);
     let class = if over { "decides over" } else { "decides" };
-    let reason = sheet.governing.as_ref().map(|g| format!("{} That limit is {}.", g.sentence, g.reason));
+    let stress = |pa: f64| with_unit(units, Quantity::Stress, Some(pa));
+    let length = |m: f64| with_unit(units, Quantity::Length, Some(m));
+    let say = Say { stress: &stress, length: &length };
+    let told = |g: &Governing| {
+        let decided = sentence(g, &sheet.stations, &sheet.verdict, &say);
+        format!("{decided} That limit is {}.", g.reason)
+    };
+    let reason = sheet.governing.as_ref().map(told);
     html! { <p {class} role="status">{ &sheet.verdict.sentence }<small>{ reason }</small></p> }
 }

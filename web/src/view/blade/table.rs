@@ -94,8 +94,10 @@ pub fn StationTable(props: &StationTableProps) -> Html {
                         "Angles are kept as read on the flat face, and pitch is reckoned from that. "
                     }
                 } }
-                { "“To best” is the first turn towards the best angle; the inflow moves a little when the \
-                   blade does. " }
+                <span class="wide-only">
+                    { "“To best” is the first turn towards the best angle; the inflow moves a little when the \
+                       blade does. " }
+                </span>
                 if one_section(job).is_some() {
                     <button type="button" class="inline" onclick={by_station}>
                         { if *open { "Hide sections" } else { "Sections by station" } }

@@ -2,6 +2,7 @@
 
 use std::rc::Rc;
 
+use spokeshave::aircraft::propellers;
 use spokeshave::result::{Envelope, EnvelopePoint, PointResult};
 use yew::prelude::*;
 
@@ -90,8 +91,14 @@ fn thrust(props: &ChartsProps, envelope: &Envelope) -> Plot {
     let top = envelope.points.iter().filter_map(|p| Some(p.full.as_ref()?.thrust_n)).fold(0.0, f64::max);
     // Drag grows without end towards rest.
     let drag = |p: &EnvelopePoint| p.asked_n.filter(|d| *d <= 1.2 * top);
+    let several = props.state.job().aircraft.as_ref().is_some_and(|a| propellers(a) > 1.5);
     Plot {
-        title: if envelope.speeds.is_some() { "Thrust and drag" } else { "Thrust and weight" },
+        title: match (asked, several) {
+            ("drag", false) => "Thrust and drag",
+            ("drag", true) => "Thrust of all and drag",
+            (_, false) => "Thrust and weight",
+            (_, true) => "Thrust of all and weight",
+        },
         unit: props.state.units.unit(Quantity::Force),
         series: vec![
             curve(envelope, "thrust", Stroke::Solid, |p| Some(p.full.as_ref()?.thrust_n)),

@@ -12,6 +12,8 @@ use crate::view::verdict::Cell;
 #[derive(Properties, PartialEq)]
 pub(super) struct FiguresProps {
     pub(super) envelope: Envelope,
+    /// How many propellers share the thrust told.
+    pub(super) propellers: f64,
     pub(super) take_off: Option<TakeOff>,
     pub(super) ceilings: Option<Ceilings>,
     pub(super) units: Units,
@@ -39,7 +41,15 @@ fn cells(props: &FiguresProps) -> Vec<Cell> {
         name: "Standing start",
         figure: figure(units, Quantity::Rpm, standing.map(|s| s.rpm)),
         unit: units.symbol(Quantity::Rpm),
-        more: format!("thrust {}", with_unit(units, Quantity::Force, standing.map(|s| s.thrust_n))),
+        more: {
+            let thrust = with_unit(units, Quantity::Force, standing.map(|s| s.thrust_n));
+            let of = if props.propellers > 1.5 {
+                format!(" of all {}", fixed(props.propellers, 0))
+            } else {
+                String::new()
+            };
+            format!("thrust{of} {thrust}")
+        },
         gauge: None,
     }];
     if aeroplane {
@@ -86,10 +96,10 @@ fn ceiling(units: Units, ceilings: Option<Ceilings>) -> Cell {
         Some(_) => "no climb even at sea level".into(),
     };
     Cell {
-        name: "Service ceiling, 0.5 m/s (100 ft/min) left",
+        name: "Service ceiling",
         figure: figure(units, Quantity::Height, ceilings.and_then(|c| c.service_m)),
         unit: units.symbol(Quantity::Height),
-        more,
+        more: format!("0.5 m/s (100 ft/min) of climb left; {more}"),
         gauge: None,
     }
 }

@@ -7,12 +7,12 @@ mod worth;
 
 use std::rc::Rc;
 
-use spokeshave::job::Aircraft;
+use spokeshave::aircraft::{hovers, propellers};
 use spokeshave::result::{Ceilings, Envelope, PitchWorth, PointResult, TakeOff};
 use yew::prelude::*;
 
 use super::caution;
-use super::chips::air_words;
+use super::chips::{air_words, flown_line};
 use crate::act::Seen;
 use crate::number::with_unit;
 use crate::state::State;
@@ -60,8 +60,7 @@ pub fn in_a_line(state: &State, envelope: Option<&Envelope>) -> String {
     let Some(envelope) = envelope else { return "thrust and drag, rpm, power, climb over airspeed".into() };
     let speed = |v| with_unit(state.units, Quantity::Speed, Some(v));
     // What rises on its rotors has no wing to fly level on.
-    let flown =
-        if matches!(state.job().aircraft, Some(Aircraft::Multirotor(_))) { "climbing" } else { "level" };
+    let flown = if hovers(state.job().aircraft.as_ref()) { "climbing" } else { "level" };
     let top =
         envelope.marks.top_speed.map(|m| format!("{flown} at {} on full throttle", speed(m.airspeed_m_s)));
     let climb = envelope
@@ -92,13 +91,15 @@ pub fn FitPanel(props: &FitPanelProps) -> Html {
     };
     let air =
         state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(state.units, p));
+    let line = flown_line(state.job());
+    let propellers = state.job().aircraft.as_ref().map_or(1.0, propellers);
     html! {
         <div class="fit">
             <p class="note">
                 { format!("The speed range{air}, the air of the flight point selected. Solid: full \
-                           throttle. Dashed: level flight.") }
+                           throttle. Dashed: {line}.") }
             </p>
-            <Figures envelope={envelope.clone()} take_off={props.take_off} ceilings={props.ceilings}
+            <Figures envelope={envelope.clone()} {propellers} take_off={props.take_off} ceilings={props.ceilings}
                 units={state.units} />
             <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()}
                 limit_rpm={props.limit_rpm} />

@@ -24,7 +24,7 @@ pub(super) fn Worth(props: &WorthProps) -> Html {
     let rows = props.worth.iter().map(|w| row(props.units, w));
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="What a variable pitch is worth">
-            <table class="sheet-table worth">
+            <table class="sheet-table worth gain">
                 <caption>{ "What blades that turn in flight would give, best turn of all" }</caption>
                 <thead><tr>
                     <th scope="col">{ "Flight point" }</th><th scope="col">{ "Figure" }</th>

@@ -22,8 +22,8 @@ pub(super) struct LinesProps {
 /// Every reading with its residual.
 #[component]
 pub(super) fn Lines(props: &LinesProps) -> Html {
-    let rows = props.logged.readings.iter().enumerate().map(|(i, line)| row(i, line, props.units));
-    let flow = if props.electric { "Current, A" } else { "Fuel, kg/h" };
+    let rows = props.logged.readings.iter().enumerate().map(|(i, line)| row(i, line, props));
+    let (flow, of) = consumed(props.electric);
     html! {
         <>
         <Residuals ..props.clone() />
@@ -33,7 +33,8 @@ pub(super) fn Lines(props: &LinesProps) -> Html {
                 <thead><tr>
                     <th scope="col">{ "Reading" }</th><th scope="col">{ "Rpm read" }</th>
                     <th scope="col">{ "less expected, before" }</th>
-                    <th scope="col">{ "with the factors" }</th><th scope="col">{ flow }</th>
+                    <th scope="col">{ "with the factors" }</th>
+                    <th scope="col">{ flow }<small>{ props.units.symbol(of) }</small></th>
                     <th scope="col">{ "expected, before" }</th>
                     <th scope="col">{ "with the factors" }</th>
                     <th scope="col">{ "Off" }<small>{ "times its likely error" }</small></th>
@@ -78,7 +79,15 @@ fn less(l: &LogLine, expected: Option<f64>) -> Option<f64> {
     Some(l.engine_rpm? - expected?)
 }
 
-fn row(i: usize, l: &LogLine, units: Units) -> Html {
+/// What an engine takes, and what measures it.
+fn consumed(electric: bool) -> (&'static str, Quantity) {
+    if electric { ("Current", Quantity::Current) } else { ("Fuel", Quantity::FuelFlow) }
+}
+
+fn row(i: usize, l: &LogLine, props: &LinesProps) -> Html {
+    let units = props.units;
+    let (_, of) = consumed(props.electric);
+    let flow = |value: Option<f64>| fixed_or_none(value.map(|v| units.shown(of, v)), 2);
     let less = |expected: Option<f64>| signed_or_none(less(l, expected), 0);
     html! {
         <tr class={classes!(l.outlier.then_some("outlier"))}>
@@ -86,9 +95,9 @@ fn row(i: usize, l: &LogLine, units: Units) -> Html {
             <td>{ figure(units, Quantity::Rpm, l.engine_rpm) }</td>
             <td>{ less(l.before_rpm) }</td>
             <td>{ less(l.after_rpm) }</td>
-            <td>{ fixed_or_none(l.consumption, 2) }</td>
-            <td>{ fixed_or_none(l.before_consumption, 2) }</td>
-            <td>{ fixed_or_none(l.after_consumption, 2) }</td>
+            <td>{ flow(l.consumption) }</td>
+            <td>{ flow(l.before_consumption) }</td>
+            <td>{ flow(l.after_consumption) }</td>
             <td>{ fixed_or_none(l.off, 1) }</td>
             <td class="state">{ &l.remark }</td>
         </tr>

@@ -156,7 +156,9 @@ pub(super) fn named_speeds(a: &Aeroplane, air: &Air) -> Vec<(&'static str, f64)>
 
 fn speed_table(state: &Seen, a: &Aeroplane, air: &Air) -> Html {
     let units = state.units;
+    let stall = speeds(a, air).stall_m_s;
     let row = |(name, v): (&'static str, f64)| {
+        let below = if stall.is_some_and(|stall| v < stall) { " (below the stall here)" } else { "" };
         let asked = Asked::at(a, air, v)?;
         let cells = [
             figure(units, Quantity::Speed, Some(v)),
@@ -164,7 +166,7 @@ fn speed_table(state: &Seen, a: &Aeroplane, air: &Air) -> Html {
             figure(units, Quantity::Power, Some(asked.power_w)),
         ];
         Some(
-            html! { <tr><th scope="row">{ words(name) }</th>{ for cells.map(|c| html! { <td>{ c }</td> }) }</tr> },
+            html! { <tr><th scope="row">{ words(name) }{ below }</th>{ for cells.map(|c| html! { <td>{ c }</td> }) }</tr> },
         )
     };
     let place = state.job().flight_points.get(state.point).map_or_else(String::new, |p| air_words(units, p));

@@ -14,7 +14,7 @@ use crate::chart::unit::Unit;
 use crate::form::Pick;
 use crate::number::significant;
 use crate::state::State;
-use crate::units::Quantity;
+use crate::units::{LengthUnit, Quantity, Units};
 
 /// Properties of [`Careful`].
 #[derive(Properties, PartialEq)]
@@ -26,18 +26,23 @@ pub(super) struct CarefulProps {
 }
 
 /// Tolerances to pick from: angle in degrees, chord and thickness in mm, and what they are called.
-const TOLERANCES: [([f64; 3], &str); 3] = [
-    ([0.1, 0.2, 0.1], "fine: 0.1°, 0.2 mm of chord, 0.1 mm of thickness"),
-    ([0.25, 0.5, 0.3], "usual: 0.25°, 0.5 mm of chord, 0.3 mm of thickness"),
-    ([0.5, 1.0, 0.5], "coarse: 0.5°, 1 mm of chord, 0.5 mm of thickness"),
-];
+const TOLERANCES: [([f64; 3], &str); 3] =
+    [([0.1, 0.2, 0.1], "fine"), ([0.25, 0.5, 0.3], "usual"), ([0.5, 1.0, 0.5], "coarse")];
+
+/// A choice of tolerances in words.
+fn choice(([angle_deg, chord_mm, thickness_mm], name): ([f64; 3], &str), units: Units) -> AttrValue {
+    let decimals = if units.length == LengthUnit::Inch { 3 } else { 1 };
+    let length = |mm: f64| Unit { decimals, ..units.unit(Quantity::Length) }.text(1e-3 * mm);
+    format!("{name}: {angle_deg}°, {} of chord, {} of thickness", length(chord_mm), length(thickness_mm))
+        .into()
+}
 
 /// What is to be worked out, and the drawings.
 #[component]
 pub(super) fn Careful(props: &CarefulProps) -> Html {
     let tolerance = use_state_eq(|| 1);
     let state = &props.state;
-    let options: Vec<AttrValue> = TOLERANCES.iter().map(|(_, words)| AttrValue::from(*words)).collect();
+    let options: Vec<AttrValue> = TOLERANCES.iter().map(|t| choice(*t, state.units)).collect();
     let onpick = {
         let tolerance = tolerance.setter();
         Callback::from(move |i: usize| tolerance.set(i.min(2)))
@@ -52,7 +57,9 @@ pub(super) fn Careful(props: &CarefulProps) -> Html {
             <h3>{ "Where to be careful" }</h3>
             <div class="buttons unprinted">
                 <Pick label="Errors of carving" {options} picked={Some(*tolerance)} {onpick} />
-                <button type="button" class="act" disabled={props.busy} {onclick}>{ "What they cost" }</button>
+                <button type="button" class="act" aria-disabled={props.busy.then_some("true")} {onclick}>
+                    { "What they cost" }
+                </button>
             </div>
             if let Some((_, costs)) = costs {
                 <CostDrawings state={state.clone()} costs={costs.clone()} />
@@ -99,8 +106,10 @@ pub fn CostDrawings(props: &CostDrawingsProps) -> Html {
     });
     html! {
         <>
-            <Pick label="Shown along the blade" options={costs.iter().map(|c| words(c)).collect::<Vec<_>>()}
-                picked={Some(shown.min(costs.len() - 1))} {onpick} />
+            <div class="buttons">
+                <Pick label="Shown along the blade" options={costs.iter().map(|c| words(c)).collect::<Vec<_>>()}
+                    picked={Some(shown.min(costs.len() - 1))} {onpick} />
+            </div>
             <p class="note">{ careful_words(state, cost) }</p>
             <div class="trio">{ for (0..3).map(|k| along(state, cost, k)) }</div>
             <div class="scroll" tabindex="0" role="region" aria-label="What errors of carving come to">
@@ -145,22 +154,29 @@ fn careful_words(state: &State, cost: &Cost) -> String {
     )
 }
 
-const KINDS: [(&str, &str); 3] = [
-    ("For each degree of blade angle", "degree"),
-    ("For each millimetre of chord", "mm"),
-    ("For each millimetre of thickness", "mm"),
-];
+/// What is in error at a station, and how many of the slope's own units, degree and millimetre, it is told for.
+fn kind(k: usize, units: Units) -> (&'static str, f64) {
+    match (k, units.length) {
+        (0, _) => ("For each degree of blade angle", 1.0),
+        (1, LengthUnit::Millimetre) => ("For each millimetre of chord", 1.0),
+        (1, LengthUnit::Inch) => ("For each 0.1 in of chord", 2.54),
+        (_, LengthUnit::Millimetre) => ("For each millimetre of thickness", 1.0),
+        (_, LengthUnit::Inch) => ("For each 0.1 in of thickness", 2.54),
+    }
+}
 
 fn along(state: &Seen, cost: &Cost, k: usize) -> Html {
     let p = &state.job().propeller;
     let tip_m = 0.5 * p.diameter_m;
     let radii = p.stations.iter().map(|s| s.radius_fraction * tip_m);
-    let points = radii.zip(&cost.slopes[k]).map(|(r, s)| [r, s.unwrap_or(f64::NAN)]).collect();
+    let (title, times) = kind(k, state.units);
+    let slopes: Vec<Option<f64>> = cost.slopes[k].iter().map(|s| s.map(|s| times * s)).collect();
+    let points = radii.zip(&slopes).map(|(r, s)| [r, s.unwrap_or(f64::NAN)]).collect();
     let series = vec![Series { name: AttrValue::default(), points, stroke: Stroke::Solid }];
     let x =
         Axis { words: "radius".into(), unit: state.units.unit(Quantity::Length), span: Some((0.0, tip_m)) };
     let shown = unit(state.units, cost.figure);
-    let unit = Unit { decimals: decimals(&cost.slopes[k], &shown), ..shown };
+    let unit = Unit { decimals: decimals(&slopes, &shown), ..shown };
     let y = Axis { words: AttrValue::default(), unit, span: None };
     let chosen = p.stations.get(state.station);
     let uprights = chosen.map(|s| Upright {
@@ -169,7 +185,7 @@ fn along(state: &Seen, cost: &Cost, k: usize) -> Html {
         chosen: true,
     });
     html! {
-        <LineChart title={KINDS[k].0} {x} {y} {series} uprights={uprights.into_iter().collect::<Vec<_>>()}
+        <LineChart {title} {x} {y} {series} uprights={uprights.into_iter().collect::<Vec<_>>()}
             height={200.0} />
     }
 }

@@ -55,7 +55,7 @@ pub(super) fn PitchDiameter(props: &PitchDiameterProps) -> Html {
             <h3>{ "Pitch and diameter" }</h3>
             <div class="buttons unprinted">
                 <Pick label="Figure" {options} {picked} {onpick} />
-                <button type="button" class="act" disabled={props.busy} {onclick}>
+                <button type="button" class="act" aria-disabled={props.busy.then_some("true")} {onclick}>
                     { format!("Draw it at {}", point_name(state)) }
                 </button>
             </div>

@@ -85,12 +85,17 @@ fn ways(work: &Work, state: &Seen, rig: &RigRef, point: &FlightPoint) -> Html {
     let all = weights(state, rig);
     let button = |label: String, name: String, task: Task, off: bool| {
         let (work, job) = (work.clone(), state.job().clone());
-        let busy = work.busy();
+        // What is at work is called off, not begun again; the button keeps the focus.
+        let busy = work.busy().then_some("true");
         let onclick = Callback::from(move |_: MouseEvent| work.begin(&job, &name, task.clone()));
-        html! { <button type="button" class="act" disabled={busy || off} {onclick}>{ label }</button> }
+        html! {
+            <button type="button" class="act" disabled={off} aria-disabled={busy} {onclick}>{ label }</button>
+        }
     };
     let name = &point.name;
+    let standing = point.airspeed_m_s == Some(0.0);
     html! {
+        <>
         <div class="buttons ways unprinted">
             { button(format!("Best-incidence twist at {name}"), format!("twist, {name}"), Task::Twist(alone), false) }
             { button(
@@ -103,10 +108,14 @@ fn ways(work: &Work, state: &Seen, rig: &RigRef, point: &FlightPoint) -> Html {
                 format!("Least induced loss at {name}"),
                 format!("least loss, {name}"),
                 Task::LeastLoss(here),
-                point.airspeed_m_s == Some(0.0)
+                standing
             ) }
             { button("Search".into(), "search".into(), Task::Search, false) }
         </div>
+        if standing {
+            <p class="note unprinted">{ "Least induced loss is laid out for a speed, and here there is none." }</p>
+        }
+        </>
     }
 }
 

@@ -64,8 +64,11 @@ impl Work {
         matches!(*self.run, Run::At(..))
     }
 
-    /// Begins; `name` is that of the blade it makes, or of the drawing.
+    /// Begins, unless something is at work; `name` is that of the blade it makes, or of the drawing.
     pub(super) fn begin(&self, job: &Rc<Job>, name: &str, task: Task) {
+        if self.busy() {
+            return;
+        }
         let order = Order { job: job.to_json(), task };
         *self.best.borrow_mut() = None;
         self.run.set(Run::At(name.into(), None));

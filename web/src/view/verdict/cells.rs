@@ -15,6 +15,8 @@ pub struct Against {
     pub limits: Limits,
     /// The engine's limit, propeller rpm.
     pub engine_rpm: Option<f64>,
+    /// Whether the weight hangs on the thrust, not on a wing.
+    pub hovers: bool,
 }
 
 /// The figures in the order shown.
@@ -28,12 +30,14 @@ pub(super) fn cells(units: Units, r: &PointResult, against: &Against) -> Vec<Cel
         gauge: None,
     };
     let torque = format!("torque {}", with_unit(units, Quantity::Torque, f.torque_n_m));
+    let several = f.thrust_n.zip(r.meeting.total_thrust_n).is_some_and(|(one, all)| all > 1.5 * one);
+    let name = if several { "Thrust of one" } else { "Thrust" };
     let thrust =
-        of("Thrust", Quantity::Force, f.thrust_n, format!("thrust coefficient {}", fixed_or_none(f.ct, 4)));
+        of(name, Quantity::Force, f.thrust_n, format!("thrust coefficient {}", fixed_or_none(f.ct, 4)));
     let power = of("Shaft power", Quantity::Power, f.power_w, torque);
     vec![
         efficiency(r),
-        Cell { gauge: thrust_gauge(units, r), ..thrust },
+        Cell { gauge: thrust_gauge(units, r, against.hovers), ..thrust },
         Cell { gauge: power_gauge(units, r), ..power },
         rpm(units, r, against),
         tip_mach(r, against),
@@ -53,11 +57,15 @@ pub(super) fn cells(units: Units, r: &PointResult, against: &Against) -> Vec<Cel
     ]
 }
 
-/// Thrust against what level flight asks of one propeller.
-fn thrust_gauge(units: Units, r: &PointResult) -> Option<Gauge> {
+/// Thrust against what level flight, or holding the weight, asks of one propeller.
+fn thrust_gauge(units: Units, r: &PointResult, hovers: bool) -> Option<Gauge> {
     let (thrust_n, all_n, asked_n) = (r.figures.thrust_n?, r.meeting.total_thrust_n?, r.meeting.asked_n?);
     let least = asked_n * thrust_n / all_n;
-    let words = format!("level flight asks {}", with_unit(units, Quantity::Force, Some(least)));
+    let words = format!(
+        "{} asks {}",
+        if hovers { "holding the weight" } else { "level flight" },
+        with_unit(units, Quantity::Force, Some(least))
+    );
     // Level flight gives what is asked, but for the last digit of the solve.
     Gauge::of(thrust_n, Allowed { least: Some(least * (1.0 - 1e-6)), most: None }, words)
 }
@@ -195,7 +203,11 @@ mod tests {
         let past = |rpm_most: f64, tip_mach_most: f64| {
             let limits =
                 Limits { rpm_most: Some(rpm_most), tip_mach_most: Some(tip_mach_most), ..Limits::default() };
-            let cells = cells(Units::default(), &result, &Against { limits, engine_rpm: Some(9000.0) });
+            let cells = cells(
+                Units::default(),
+                &result,
+                &Against { limits, engine_rpm: Some(9000.0), hovers: false },
+            );
             [3, 4].map(|i: usize| cells[i].gauge.as_ref().unwrap().is_past())
         };
         assert_eq!(past(rpm - 10.0, mach + 0.01), [true, false]);
