@@ -178,35 +178,6 @@ fn ground_runs_alone_do_not_tell_drag_nor_engine_from_propeller() {
     assert!((pair.value - quotient).abs() < 1e-9 && pair.correlation > 0.9);
 }
 
-/// One mismatch m of variance s², two factors of variance w² before: the quotient's mean is m 2w²/(2w² + s²)
-/// and its variance 2w² s²/(2w² + s²) (linear least squares with a prior; any text of estimation, common
-/// practice).
-#[test]
-fn one_reading_gives_the_closed_form() {
-    let job = demo(0);
-    // So little that the slopes, which are taken at the rpm believed, change by a part in a thousand at most.
-    let factors = Factors { engine_power: 1.001, ..Factors::default() };
-    let true_rig = Rig::with_factors(&job, &factors).unwrap();
-    let reading = LogReading { fuel_kg_per_h: None, ..read(&true_rig, 0.0, 0.0, true, &mut || 0.0) };
-    let many = |n: usize| logged(&with_readings(&job, vec![reading.clone(); n])).estimate;
-    let quotient = |n: usize| {
-        let e = many(n);
-        (e.factors.engine_power / e.factors.propeller_power).ln()
-    };
-    // m and s² from one and four readings: q(n) = m n/(n + k), k = s²/2w².
-    let (one, four) = (quotient(1), quotient(4));
-    let k = (four - one) / (one - four / 4.0);
-    let m = one * (1.0 + k);
-    // The part in a thousand of the slopes.
-    assert!((quotient(9) / (m * 9.0 / (9.0 + k)) - 1.0).abs() < 1e-3);
-    let w2 = 0.05_f64.powi(2);
-    let e = many(1);
-    let (deviation, prior) = (e.found[0].deviation, w2);
-    // By symmetry each factor keeps half the sum's variance and half the quotient's: (2w² + 2w² k/(1 + k))/4.
-    let closed = (2.0 * prior + 2.0 * prior * k / (1.0 + k)) / 4.0;
-    assert!((deviation.powi(2) / closed - 1.0).abs() < 1e-3, "{deviation} {closed}");
-}
-
 #[test]
 fn a_wrong_reading_is_flagged_with_a_likely_cause_and_left_out() {
     let (job, true_rig) = truth();

@@ -63,6 +63,9 @@ held! {
     turning_fast_gives_the_published_frequencies
     validate_moisture_wood_handbook
     validate_least_loss_goldstein
+    unequal_masses_pull_once_a_turn
+    a_blade_out_of_track_turns_its_couple_with_the_shaft
+    one_reading_gives_the_closed_form
 }
 
 /// Tests that look at more than the checks of their topic.

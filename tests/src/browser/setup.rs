@@ -40,6 +40,8 @@ pub(super) fn capabilities(folder: &Path, desktop: Option<&Desktop>) -> Result<M
             "binary": program,
             "prefs": desktop.map_or_else(|| json!({}), Desktop::preferences),
         },
+        // The rules of accessibility take a minute over a page with every panel open.
+        "timeouts": {"script": 300_000},
         "goog:loggingPrefs": {"performance": "ALL", "browser": "ALL"},
     });
     match capabilities {

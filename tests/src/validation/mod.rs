@@ -5,11 +5,13 @@ mod air;
 mod aircraft;
 mod beam;
 mod beam_section;
+mod carved;
 mod engine;
 mod exact_flow;
 mod fit;
 mod formulas;
 pub mod list;
+mod logbook;
 mod plots;
 pub mod rotor;
 pub mod section;
@@ -53,7 +55,7 @@ const MACHINE: &str = "Engine and aircraft";
 const WOOD: &str = "Wood and strength";
 
 /// All of them, in the order of the list.
-pub static TOPICS: [Topic; 39] = [
+pub static TOPICS: [Topic; 42] = [
     Topic::new("Air", "validate_air_iso_2533", air::standard),
     Topic::new(SOLVER, "joukowski_lift_is_exact", exact_flow::joukowski_lift),
     Topic::new(SOLVER, "joukowski_speeds_are_exact", exact_flow::joukowski_speeds),
@@ -93,6 +95,9 @@ pub static TOPICS: [Topic; 39] = [
     Topic::new(WOOD, "turning_slowly_stiffens_by_southwells_coefficient", beam::southwell),
     Topic::new(WOOD, "turning_fast_gives_the_published_frequencies", beam::turning_fast),
     Topic::new(WOOD, "validate_moisture_wood_handbook", beam::moisture),
+    Topic::new("As carved", "unequal_masses_pull_once_a_turn", carved::unequal),
+    Topic::new("As carved", "a_blade_out_of_track_turns_its_couple_with_the_shaft", carved::out_of_track),
+    Topic::new("Logbook", "one_reading_gives_the_closed_form", logbook::one_mismatch),
 ];
 
 /// The topic that a test asserts.
