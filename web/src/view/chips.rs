@@ -15,6 +15,7 @@ use crate::state::Action;
 use crate::units::{Quantity, Units};
 
 /// What is flown at part throttle, as a line over speed.
+#[must_use]
 pub fn flown_line(job: &Job) -> &'static str {
     if hovers(job.aircraft.as_ref()) { "hover and climb" } else { "level flight" }
 }
