@@ -42,6 +42,22 @@ fn laden() -> Job {
     job
 }
 
+/// Four times as large at a quarter of the rpm, for which speeds and angles stay the same and forces are sixteen
+/// times as great.
+fn large() -> Job {
+    let mut job = demo(0);
+    let a = aeroplane(&mut job);
+    (a.mass_kg, a.wing_area_m2) = (16.0 * a.mass_kg, 16.0 * a.wing_area_m2);
+    let propeller = &mut job.propeller;
+    (propeller.diameter_m, propeller.hub_diameter_m) =
+        (4.0 * propeller.diameter_m, 4.0 * propeller.hub_diameter_m);
+    propeller.stations.iter_mut().for_each(|s| s.chord_m *= 4.0);
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    piston.max_rpm = piston.max_rpm.map(|rpm| rpm / 4.0);
+    piston.full_throttle.iter_mut().for_each(|p| (p.rpm, p.power_w) = (p.rpm / 4.0, 16.0 * p.power_w));
+    job
+}
+
 /// So little lift that the stall is fast.
 fn hasty() -> Job {
     let mut job = demo(0);
@@ -181,7 +197,7 @@ fn highest(from: f64, to: f64, value: impl Fn(f64) -> Option<f64>) -> Option<(f6
 
 #[test]
 fn top_speed_is_the_last_at_which_thrust_suffices() {
-    let jobs = [turned(-8.0), twin(), laden(), demo(1), demo(2)];
+    let jobs = [turned(-8.0), twin(), laden(), large(), demo(1), demo(2)];
     let mut held = 0;
     for mut job in jobs {
         job.flight_points = vec![point(None, Setting::FullThrottle {})];
@@ -245,6 +261,23 @@ fn without_a_stall_the_best_climb_is_that_of_a_scan_from_below_least_power() {
     let found = ceilings(&plain.rig, 0.0).unwrap().sea_level_climb_m_s.unwrap();
     // As above.
     assert!((found - best.1).abs() < 2e-3, "{found} {best:?}");
+}
+
+/// A propeller so fine that it gives most below the speed of least power: where no stall is known the best climb is
+/// the slowest that is looked at, 0.8 times that.
+#[test]
+fn without_a_stall_no_climb_slower_than_eight_tenths_of_least_power_counts() {
+    let mut job = turned(-14.0);
+    aeroplane(&mut job).cl_max = None;
+    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
+    piston.max_rpm = Some(2600.0);
+    let plain = Plain::new(&job, 0.0);
+    let slowest = 0.8 * speeds(aeroplane(&mut job), &plain.air).least_power_m_s;
+    let climb = |v: f64| v * plain.sine(v).unwrap();
+    assert!(climb(0.9 * slowest) > climb(slowest) + 0.1 && climb(slowest) > climb(1.05 * slowest));
+    let found = ceilings(&plain.rig, 0.0).unwrap().sea_level_climb_m_s.unwrap();
+    // Two roads to one root.
+    assert!((found - climb(slowest)).abs() < 1e-5, "{found} {}", climb(slowest));
 }
 
 #[test]

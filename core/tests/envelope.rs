@@ -118,9 +118,29 @@ fn past_the_limit_rpm_the_figure_held_at_it_is_given_beside_the_state() {
             assert!((thrust / held.meeting.asked_n.unwrap() - 1.0).abs() < 1e-6);
         }
     }
-    let marks = range(&job, 60).marks;
+    let found = range(&job, 60);
+    let (marks, points) = (&found.marks, &found.points);
     assert!(marks.top_speed.unwrap().held_at_limit);
-    assert!(marks.limit_rpm_from_m_s.unwrap() < marks.top_speed.unwrap().airspeed_m_s);
+    let from = marks.limit_rpm_from_m_s.unwrap();
+    assert!(from < marks.top_speed.unwrap().airspeed_m_s);
+    // All that the range tells is between which two speeds it begins: halfway.
+    let first = points.iter().position(|p| p.full.as_ref().is_some_and(|f| f.held_at_limit)).unwrap();
+    let halfway = 0.5 * (points[first - 1].airspeed_m_s + points[first].airspeed_m_s);
+    assert!((from / halfway - 1.0).abs() < 1e-12, "{from} {halfway}");
+}
+
+/// At rest a multirotor flies: nothing there is slower than a stall that it does not have.
+#[test]
+fn a_multirotor_hovers_at_the_first_speed_of_its_range() {
+    let job = demo(2);
+    let hover = &range(&job, 12).points[0];
+    assert_eq!((hover.airspeed_m_s, hover.level_state), (0.0, State::Ok));
+    // 8 A h, of which four fifths are used, feed four motors.
+    let drawn = Rig::new(&job).unwrap().point(0).unwrap().meeting.battery_current_a.unwrap();
+    let expected = 3600.0 * 8.0 * 0.8 / (4.0 * drawn);
+    let told = hover.level.as_ref().unwrap().endurance_s.unwrap();
+    // Two roads to one root, as above.
+    assert!((told / expected - 1.0).abs() < 5e-6, "{told} {expected}");
 }
 
 /// A propeller that passes the limit rpm at rest may take more with speed, and less again: held, matched and

@@ -2,7 +2,7 @@
 
 use spokeshave::air::Air;
 use spokeshave::aircraft::drag_n;
-use spokeshave::fit::{highest_rpm, offer, slower_than_stall, spare};
+use spokeshave::fit::{condition, highest_rpm, offer, slower_than_stall, spare};
 use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, PowerPoint, Setting};
 use spokeshave::result::{Limit, Note, PointResult, State};
 use spokeshave::rig::{Rig, air_of, rotation_rad_s};
@@ -333,4 +333,27 @@ fn the_offer_is_the_engines_at_each_rpm_in_both_airs() {
     let ends: Vec<f64> = offer(&rig, 0, 0).iter().map(|o| o.engine_rpm.round()).collect();
     assert_eq!(ends, [2000.0, 3300.0]);
     near(Some(highest_rpm(rig.shaft.as_ref().unwrap())), 3300.0 / 1.25, 1e-12);
+}
+
+/// Rotation is looked for from a hundredth of a tip at Mach 1.2 on: power that is taken there is met by that rpm,
+/// power that is taken by less is out of reach.
+#[test]
+fn what_hardly_turns_the_propeller_is_out_of_reach() {
+    let mut job = demo(0);
+    let rig = Rig::new(&job).unwrap();
+    let air = Air::standard(0.0, 0.0).unwrap();
+    let fastest = 1.2 * air.sound_speed_m_s / rig.rotor.blade.radius_m;
+    for (share, met) in [(0.008, false), (0.0095, false), (0.0105, true), (0.02, true)] {
+        let still = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: share * fastest, turn_rad: 0.0 };
+        let power_w = rig.rotor.loads(&still).torque_n_m * still.rotation_rad_s;
+        job.flight_points[0].setting = Setting::Power { power_w };
+        let found = condition(&rig, &job.flight_points[0], air);
+        let turns = found.map(|c| c.rotation_rad_s / still.rotation_rad_s - 1.0);
+        // A last step of 3e-5 of the range, of which a hundredth is left: 3e-5 of a hundredth of the range.
+        assert_eq!(
+            turns.map(|off| off.abs() < 3e-5),
+            if met { Ok(true) } else { Err(State::OutOfReach) },
+            "{share}"
+        );
+    }
 }

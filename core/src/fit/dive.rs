@@ -50,7 +50,11 @@ mod tests {
         job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg };
         let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
         piston.max_rpm = Some(limit_rpm);
-        let rig = Rig::new(&job).unwrap();
+        ready(&job)
+    }
+
+    fn ready(job: &Job) -> (Rig, Condition) {
+        let rig = Rig::new(job).unwrap();
         let air = crate::air::Air::standard(0.0, 0.0).unwrap();
         let turn_rad = rig.turn_rad();
         (rig, Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad })
@@ -82,5 +86,20 @@ mod tests {
             fast += u32::from(within && !subsonic);
         }
         assert!(told > 2 && slow > 0 && fast > 0, "{told} {slow} {fast}");
+    }
+
+    /// Flat blades, as those of an autogyro, turn by the air from ahead as long as it does not stall them, and
+    /// are braked by more of it: the slowest speed at which it holds their rpm counts.
+    #[test]
+    fn of_two_speeds_at_which_the_torque_is_nothing_the_slower_counts() {
+        let mut job = Job::from_json(DEMOS[0].json).unwrap();
+        job.propeller.stations.iter_mut().for_each(|s| s.angle_deg = Some(-3.0));
+        let (rig, at) = ready(&job);
+        let still = run_up(&rig, &at, 3300.0);
+        let v = scanned(&rig, &at, 3300.0);
+        let fast = Condition { airspeed_m_s: 230.0, ..still };
+        assert!(rig.rotor.loads(&fast).torque_n_m > 0.0, "braked again");
+        let found = dive(&rig, &at).unwrap().condition.airspeed_m_s;
+        assert!(found <= v && found > v - 1.0, "{found} {v}");
     }
 }

@@ -222,8 +222,20 @@ mod tests {
         let falls = |v: f64| 9.0 - v;
         assert!((summit(&falls, 0.0, false).unwrap().airspeed_m_s - 2.0).abs() < 1e-12);
         assert!(summit(&falls, 0.0, true).unwrap().airspeed_m_s.abs() < 1e-12);
-        // What is nowhere above zero is no best.
+        // What is nowhere above zero is no best; nor is zero, as the range of what hovers and can do no more.
         assert!(summit(&|v| -1.0 - v, 0.0, false).is_none());
+        assert!(summit(&|v| -v, 0.0, true).is_none());
+    }
+
+    /// A point at the slowest flight but for rounding, whose figure two roads to one root have made a little
+    /// different, tells nothing of how the figure runs: from there on it falls, and its best is there.
+    #[test]
+    fn a_point_at_the_slowest_flight_does_not_count_twice() {
+        let falls = |v: f64| 9.0 - 0.01 * (v - 11.5).powi(2) - if v < 12.0 { 2e-5 } else { 0.0 };
+        for stall in [12.0 * (1.0 - 1e-9), 12.0 * (1.0 - 3e-7)] {
+            let found = summit(&falls, stall, true).unwrap();
+            assert!((found.airspeed_m_s - 12.0).abs() < 1e-5, "{stall}: {found:?}");
+        }
     }
 
     #[test]

@@ -10,20 +10,33 @@ use crate::section::{About, Family, Polar, PolarPoint, Situation, library};
 
 /// An invented polar over all angles: linear lift that fades into a flat plate at 13° and −11°.
 fn plate_polar() -> Family {
+    family_of(plate_points(1.0))
+}
+
+/// The same section upside down, which stalls early where it lifts downward.
+fn upside_down() -> Family {
+    family_of(plate_points(-1.0))
+}
+
+fn family_of(points: Vec<PolarPoint>) -> Family {
+    Family::new(About::default(), &[Polar { reynolds: None, mach: 0.0, thickness_ratio: None, points }])
+        .unwrap()
+}
+
+/// The points of it, lift and angle of attack counted upward or downward.
+fn plate_points(sign: f64) -> Vec<PolarPoint> {
     let logistic = |x: f64| 1.0 / (1.0 + (-x).exp());
     let point = |i: i32| {
-        let alpha_deg = f64::from(i) * 0.5;
+        let alpha_deg = sign * f64::from(i) * 0.5;
         let a = alpha_deg.to_radians();
         let w = logistic((13.0 - alpha_deg) / 1.8) * logistic((alpha_deg + 11.0) / 1.8);
         let linear = 5.9 * (a + 3.5f64.to_radians());
         let cl = w * linear + (1.0 - w) * 0.95 * (2.0 * a).sin();
         let cd =
             w * (0.0085 + 0.012 * (linear - 0.35).powi(2)) + (1.0 - w) * (0.0085 + 1.9 * a.sin().powi(2));
-        PolarPoint { alpha_deg, cl, cd, cm: None }
+        PolarPoint { alpha_deg: sign * alpha_deg, cl: sign * cl, cd, cm: None }
     };
-    let points = (-360..=360).map(point).collect();
-    Family::new(About::default(), &[Polar { reynolds: None, mach: 0.0, thickness_ratio: None, points }])
-        .unwrap()
+    (-360..=360).map(point).collect()
 }
 
 /// All roots between two angles by a scan of `step`, finer near zero; the one of least `|α|` first.

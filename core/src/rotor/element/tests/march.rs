@@ -229,3 +229,46 @@ fn towards_stall_a_neighbour_still_spares_looks() {
     }
     assert!(tried > 10 && 10 * warm < 9 * cold, "{tried} tried, {warm} of {cold}");
 }
+
+/// Braking elements close to where lift downward stalls that have three balances ahead, (V, blade angle, solidity):
+/// the one of least angle of attack is found, of which the first two lie within 40 % of that stall.
+#[test]
+fn where_lift_downward_stalls_the_nearest_of_three_balances_is_found() {
+    let family = upside_down();
+    for (v, angle_deg, solidity) in [
+        (40.0, -7.0, 0.2),
+        (55.0, 5.0, 0.2),
+        (80.0, 12.0, 0.3),
+        (110.0, 17.0, 0.45),
+        (80.0, -2.0, 0.6),
+        (150.0, 21.0, 0.6),
+    ] {
+        let e = of(&family, v, angle_deg, solidity);
+        let roots = scanned(&e, NEAR_ZERO_RAD, FRAC_PI_2, 0.2f64.to_radians());
+        assert_eq!(roots.len(), 3, "{v} {angle_deg} {solidity}");
+        assert!(roots[1] - e.angle_rad < -1.4 * e.section.negative_stall_rad(), "{v} {angle_deg} {solidity}");
+        let found = e.balance().unwrap().inflow_rad;
+        assert!((found - roots[0]).abs() < 1e-9, "{v} {angle_deg} {solidity} {found} {roots:?}");
+    }
+}
+
+/// What an element leaves behind that fast air from ahead meets nearly across its chord, told to one at rest or
+/// nearly so: steps from there run down the residual and far out of the flow from ahead, and lead to no balance but
+/// the one that a scan finds.
+#[test]
+fn from_a_neighbour_of_quite_another_kind_the_same_balance_is_found() {
+    let family = plate_polar();
+    for (left, here) in [
+        ((100.0, -36.0, 0.1), (0.0, 5.0, 0.05)),
+        ((100.0, -36.0, 0.1), (0.0, 5.0, 0.1)),
+        ((200.0, -21.0, 0.1), (5.0, 3.0, 0.1)),
+        ((200.0, -17.0, 0.1), (0.0, 3.0, 0.1)),
+    ] {
+        let [before, e] = [left, here].map(|(v, angle_deg, solidity)| of(&family, v, angle_deg, solidity));
+        let mut near = told(&before.balance().unwrap(), 0.0);
+        before.balance_near(&mut near).unwrap();
+        let found = e.balance_near(&mut near).unwrap().inflow_rad;
+        let expected = by_scan(&e).unwrap();
+        assert!((found - expected).abs() < 1e-9, "{left:?} {here:?} {found} {expected}");
+    }
+}
