@@ -263,23 +263,6 @@ fn without_a_stall_the_best_climb_is_that_of_a_scan_from_below_least_power() {
     assert!((found - best.1).abs() < 2e-3, "{found} {best:?}");
 }
 
-/// A propeller so fine that it gives most below the speed of least power: where no stall is known the best climb is
-/// the slowest that is looked at, 0.8 times that.
-#[test]
-fn without_a_stall_no_climb_slower_than_eight_tenths_of_least_power_counts() {
-    let mut job = turned(-14.0);
-    aeroplane(&mut job).cl_max = None;
-    let Some(Engine::Piston(piston)) = &mut job.engine else { panic!("a piston engine") };
-    piston.max_rpm = Some(2600.0);
-    let plain = Plain::new(&job, 0.0);
-    let slowest = 0.8 * speeds(aeroplane(&mut job), &plain.air).least_power_m_s;
-    let climb = |v: f64| v * plain.sine(v).unwrap();
-    assert!(climb(0.9 * slowest) > climb(slowest) + 0.1 && climb(slowest) > climb(1.05 * slowest));
-    let found = ceilings(&plain.rig, 0.0).unwrap().sea_level_climb_m_s.unwrap();
-    // Two roads to one root.
-    assert!((found - climb(slowest)).abs() < 1e-5, "{found} {}", climb(slowest));
-}
-
 #[test]
 fn an_aeroplane_that_cannot_climb_has_no_ceiling() {
     let mut job = demo(0);

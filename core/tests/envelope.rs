@@ -3,7 +3,7 @@
 use spokeshave::air::Air;
 use spokeshave::aircraft::drag_n;
 use spokeshave::fit::{ceilings, crossings, envelope, matched, take_off};
-use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PowerPoint, Setting};
+use spokeshave::job::{Aircraft, DEMOS, Engine, FlightPoint, Job, PitchControl, PowerPoint, Setting};
 use spokeshave::result::{Envelope, Note, State};
 use spokeshave::rig::{Rig, air_of};
 use spokeshave::rotor::Condition;
@@ -118,15 +118,31 @@ fn past_the_limit_rpm_the_figure_held_at_it_is_given_beside_the_state() {
             assert!((thrust / held.meeting.asked_n.unwrap() - 1.0).abs() < 1e-6);
         }
     }
-    let found = range(&job, 60);
-    let (marks, points) = (&found.marks, &found.points);
+    let marks = range(&job, 60).marks;
     assert!(marks.top_speed.unwrap().held_at_limit);
-    let from = marks.limit_rpm_from_m_s.unwrap();
-    assert!(from < marks.top_speed.unwrap().airspeed_m_s);
-    // All that the range tells is between which two speeds it begins: halfway.
-    let first = points.iter().position(|p| p.full.as_ref().is_some_and(|f| f.held_at_limit)).unwrap();
-    let halfway = 0.5 * (points[first - 1].airspeed_m_s + points[first].airspeed_m_s);
-    assert!((from / halfway - 1.0).abs() < 1e-12, "{from} {halfway}");
+    assert!(marks.limit_rpm_from_m_s.unwrap() < marks.top_speed.unwrap().airspeed_m_s);
+}
+
+/// The range tells between which two speeds the limit rpm is reached; told is halfway, or its first speed where it
+/// is reached there already.
+#[test]
+fn the_limit_rpm_is_reached_halfway_to_the_first_speed_held_at_it() {
+    let mut partway = 0;
+    for turn_deg in [0.0, -1.0, -2.0, -4.0, -8.0] {
+        let mut job = demo(0);
+        job.propeller.pitch_control = PitchControl::GroundAdjustable { turn_deg };
+        let Envelope { marks, points, .. } = range(&job, 60);
+        let held = points.iter().position(|p| p.full.as_ref().is_some_and(|f| f.held_at_limit));
+        let expected = held.map(|first| {
+            partway += u32::from(first > 0);
+            0.5 * (points[first.saturating_sub(1)].airspeed_m_s + points[first].airspeed_m_s)
+        });
+        let from = marks.limit_rpm_from_m_s;
+        assert_eq!(from.is_some(), expected.is_some(), "{turn_deg}");
+        let off = from.unwrap_or(1.0) - expected.unwrap_or(1.0);
+        assert!(off.abs() < 1e-9, "{turn_deg}: {from:?} {expected:?}");
+    }
+    assert!(partway > 1);
 }
 
 /// At rest a multirotor flies: nothing there is slower than a stall that it does not have.

@@ -58,6 +58,7 @@ const RECALLED: &str = "usual data-sheet values, from memory";
 
 /// A wood: specific gravity, then bending, modulus, compression along and across the grain, and shear, each
 /// at 12 % and green.
+// A row of the handbook in its own order.
 #[allow(clippy::too_many_arguments)]
 const fn wood(
     name: &'static str,

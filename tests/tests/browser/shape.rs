@@ -1,7 +1,7 @@
 //! Better blades are made on the page, compared, taken and given back.
 
 use anyhow::{Context, Result};
-use spokeshave::job::Job;
+use spokeshave::job::{FlightPoint, Job};
 use spokeshave::rig::Rig;
 use spokeshave::shape::twist;
 use spokeshave_tests::browser::{Browser, drive};
@@ -64,9 +64,12 @@ async fn a_twist_is_made_compared_used_and_taken_back() -> Result<()> {
 async fn the_page_answers_during_a_search_which_keeps_its_best_when_called_off() -> Result<()> {
     drive("search", async |browser| {
         browser.open_page().await?;
-        // Many elements, so that the search is still at it when it is called off.
+        // Many elements and flight points, so that the search is still at it when it is called off.
         let mut job = example()?;
-        job.method.elements = 160;
+        job.method.elements = 400;
+        let cruise = job.flight_points[CRUISE].clone();
+        job.flight_points
+            .extend((1..=4).map(|i| FlightPoint { name: format!("Cruise {i}"), ..cruise.clone() }));
         browser.run(&format!("spokeshave.keep.before({})", serde_json::to_string(&job.to_json())?)).await?;
         browser.reload().await?;
         browser.press("Search").await?;

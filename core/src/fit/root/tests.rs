@@ -103,13 +103,13 @@ fn a_known_slope_saves_a_look() {
 }
 
 /// A demand that jumps through zero, over as many rpm as a propeller is looked for: bracketed to a
-/// thousand-millionth of the range.
+/// thousand-millionth of the range, and off by two of those at most.
 #[test]
 fn a_jump_is_bracketed_within_a_wide_range() {
     for jump in [1234.567, 3000.3, 4777.1] {
         let demand = |x: f64| if x < jump { -1.0 } else { 1.0 };
         let search = Search { range: 0.0..=5000.0, steps: 24, ..search(&never, &demand, Wanted::Highest) };
         let root = search.exact_root().unwrap();
-        assert!((root.x - jump).abs() < 5e-6, "{root:?} {jump}");
+        assert!((root.x - jump).abs() < 1e-5, "{root:?} {jump}");
     }
 }
