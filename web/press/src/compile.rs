@@ -29,7 +29,10 @@ pub(crate) fn compile(workspace: &Workspace, toolchain: &Toolchain) -> Result<Mo
         "--target",
         TARGET,
     ]);
-    cargo.env_remove("RUSTFLAGS").env("CARGO_ENCODED_RUSTFLAGS", hidden_paths(workspace).join("\u{1f}"));
+    cargo
+        .env_remove("RUSTFLAGS")
+        .env("CARGO_ENCODED_RUSTFLAGS", hidden_paths(workspace).join("\u{1f}"))
+        .env("CARGO_INCREMENTAL", "0");
     let target = match toolchain {
         Toolchain::Installed => workspace.target.clone(),
         Toolchain::Debian(debian) => {
