@@ -311,17 +311,25 @@ fn entry(polar: &Polar, steepest: f64) -> Entry {
     }
 }
 
-/// Stall is sought within ±25°: beyond it a plate's lift may exceed a thin section's.
+/// Stall is sought within ±25°: beyond it a plate's lift may exceed a thin section's. Where lift still rises there it
+/// may be such a plate's already: an angle on whose either side it falls, or the table's end, goes before.
 fn landmarks(polar: &Polar) -> Landmarks {
-    // Backwards, so that of equal lifts the angle nearest to the attached range counts.
-    let near = || polar.points.iter().rev().filter(|p| p.alpha_deg.abs() <= 25.0);
-    let by_lift = |a: &&super::polar::PolarPoint, b: &&super::polar::PolarPoint| a.cl.total_cmp(&b.cl);
-    let rad = |p: Option<&super::polar::PolarPoint>| p.map(|p| p.alpha_deg.to_radians());
     let (points, n) = (&polar.points, polar.points.len());
-    let (first, last) = (points[0].alpha_deg.to_radians(), points[n - 1].alpha_deg.to_radians());
-    let stall = rad(near().max_by(by_lift)).unwrap_or(last);
-    let negative_stall =
-        rad(near().filter(|p| p.alpha_deg.to_radians() <= stall).min_by(by_lift)).unwrap_or(first);
+    let rad = |i: usize| points[i].alpha_deg.to_radians();
+    let (first, last) = (rad(0), rad(n - 1));
+    // Of equal lifts the last one looked at counts: the angle nearest to the attached range.
+    let greatest = |sign: f64, order: &[usize]| {
+        let lift = |i: usize| sign * points[i].cl;
+        let near = || order.iter().copied().filter(|&i| points[i].alpha_deg.abs() <= 25.0);
+        let falls =
+            |i: &usize| [i.saturating_sub(1), (i + 1).min(n - 1)].iter().all(|&j| lift(j) <= lift(*i));
+        let by_lift = |a: &usize, b: &usize| lift(*a).total_cmp(&lift(*b));
+        near().filter(falls).max_by(by_lift).or_else(|| near().max_by(by_lift))
+    };
+    let (up, down): (Vec<usize>, Vec<usize>) = ((0..n).collect(), (0..n).rev().collect());
+    let at = greatest(1.0, &down);
+    let stall = at.map_or(last, rad);
+    let negative_stall = greatest(-1.0, &up[..=at.unwrap_or(n - 1)]).map_or(first, rad);
     let crossing = points.windows(2).find(|w| {
         let inside = w[0].alpha_deg.to_radians() >= negative_stall && w[1].alpha_deg.to_radians() <= stall;
         inside && w[0].cl <= 0.0 && w[1].cl > 0.0

@@ -174,3 +174,23 @@ fn the_bound_of_the_rise_is_what_the_cubics_reach() {
         assert!((found / expected - 1.0).abs() < 1e-3, "{found} {expected}");
     }
 }
+
+/// A plate's lift, which goes on rising past 25°, is not the stall of the section that faded into it.
+#[test]
+fn stall_is_where_lift_falls_on_either_side() {
+    let landmarks_of = |lifts: [f64; 7]| {
+        let points = (-3..=3).zip(lifts).map(|(i, cl)| PolarPoint {
+            alpha_deg: 10.0 * f64::from(i),
+            cl,
+            cd: 0.01,
+            cm: None,
+        });
+        let polar = Polar { reynolds: None, mach: 0.0, thickness_ratio: None, points: points.collect() };
+        let l = landmarks(&polar);
+        [l.negative_stall, l.stall].map(|a| a.to_degrees().round())
+    };
+    assert_eq!(landmarks_of([-0.9, -0.7, -0.6, 0.0, 1.2, 0.9, 1.0]), [-20.0, 10.0]);
+    assert_eq!(landmarks_of([-0.9, -0.5, -0.6, 0.0, 0.6, 0.5, 0.9]), [-10.0, 10.0]);
+    // Where it falls nowhere within 25° the most there counts.
+    assert_eq!(landmarks_of([-0.9, -0.7, -0.5, 0.0, 0.5, 0.7, 0.9]), [-20.0, 20.0]);
+}

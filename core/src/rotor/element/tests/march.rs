@@ -272,3 +272,16 @@ fn from_a_neighbour_of_quite_another_kind_the_same_balance_is_found() {
         assert!((found - expected).abs() < 1e-9, "{left:?} {here:?} {found} {expected}");
     }
 }
+
+/// An element whose air comes mostly from ahead, close to where its lift downward stalls and fades into a plate's: of
+/// its three balances the one of least angle of attack is found.
+#[test]
+fn where_lift_downward_fades_into_a_plates_the_nearest_of_three_balances_is_found() {
+    let (family, x) = (plate_polar(), 0.994);
+    let ends = Ends::new(3.0, x, 1.0, 0.15, true).exact_at_tip(3, x);
+    let e = element(&family, (65.64, 22.4, 15.39, 0.5344, ends));
+    let roots = scanned(&e, NEAR_ZERO_RAD, FRAC_PI_2, 0.1f64.to_radians());
+    assert_eq!(roots.len(), 3, "{roots:?}");
+    let found = e.balance().unwrap().inflow_rad;
+    assert!((found - roots[0]).abs() < 1e-9, "{found} {roots:?}");
+}
