@@ -70,9 +70,7 @@ const ROUNDED: f64 = 1e-9;
 /// # Errors
 /// The state that says why there is none.
 pub fn condition(rig: &Rig, point: &FlightPoint, air: Air) -> Result<Condition, State> {
-    let still =
-        |airspeed_m_s: f64| Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
-    let at = still(point.airspeed_m_s.unwrap_or(0.0));
+    let at = rig.unsolved(air, point.airspeed_m_s.unwrap_or(0.0));
     match point.setting {
         Setting::Rpm { rpm } => Ok(Condition { rotation_rad_s: rotation_rad_s(rpm), ..at }),
         Setting::Power { power_w } => Solver::new(rig).power(&at, power_w).map(|met| met.condition),

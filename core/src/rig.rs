@@ -8,7 +8,7 @@ use crate::blade::{Blade, BladeError};
 use crate::engine::Shaft;
 use crate::job::{Aircraft, Factors, FlightPoint, Job, PitchControl, Propeller};
 use crate::result::PropellerFigures;
-use crate::rotor::Rotor;
+use crate::rotor::{Condition, Rotor};
 
 /// A job ready for computing.
 #[derive(Clone, Debug)]
@@ -87,6 +87,12 @@ impl Rig {
             PitchControl::GroundAdjustable { turn_deg } => turn_deg.to_radians(),
             PitchControl::Fixed {} | PitchControl::ConstantSpeed { .. } => 0.0,
         }
+    }
+
+    /// The propeller in this air at this airspeed (m/s), its rotation still to be found: 1 rad/s stands for it.
+    #[must_use]
+    pub fn unsolved(&self, air: Air, airspeed_m_s: f64) -> Condition {
+        Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: self.turn_rad() }
     }
 }
 

@@ -90,7 +90,7 @@ impl Rig {
         let point = self.job.flight_points.get(index)?;
         let envelope = envelope(self, point, speeds, &FIT_RADIUS_FRACTIONS)?;
         let air = air_of(point).ok()?;
-        let still = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: self.turn_rad() };
+        let still = self.unsolved(air, 0.0);
         Some(Fit {
             spokeshave: crate::job::VERSION,
             title: self.job.title.clone(),

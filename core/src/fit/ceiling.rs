@@ -14,7 +14,6 @@ use crate::aircraft::{drag_n, propellers, speeds, weight_n};
 use crate::job::{Aeroplane, Aircraft};
 use crate::result::Ceilings;
 use crate::rig::Rig;
-use crate::rotor::Condition;
 
 /// Rate of climb at the service ceiling, m/s: common practice.
 const SERVICE_M_S: f64 = 0.5;
@@ -62,7 +61,7 @@ fn best_climb_m_s(rig: &Rig, a: &Aeroplane, altitude_m: f64, isa_offset_k: f64) 
     let aircraft = Aircraft::Aeroplane(a.clone());
     let kept = kept_share(rig);
     let climb = |v: f64, trail: &mut Trail| {
-        let at = Condition { air, airspeed_m_s: v, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+        let at = rig.unsolved(air, v);
         let full = solver.full(&at, trail).ok()?;
         let thrust = full.loads.thrust_n * propellers(&aircraft) * kept;
         Some((thrust - drag_n(a, &air, v)?) * v / weight_n(&aircraft))

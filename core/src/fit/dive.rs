@@ -56,8 +56,8 @@ mod tests {
     fn ready(job: &Job) -> (Rig, Condition) {
         let rig = Rig::new(job).unwrap();
         let air = crate::air::Air::standard(0.0, 0.0).unwrap();
-        let turn_rad = rig.turn_rad();
-        (rig, Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad })
+        let at = rig.unsolved(air, 0.0);
+        (rig, at)
     }
 
     /// The slowest speed, by steps of 1 m/s, at which the air drives the propeller at its limit rpm.

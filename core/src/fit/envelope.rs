@@ -23,7 +23,7 @@ const BEYOND_TOP: f64 = 1.12;
 #[must_use]
 pub fn envelope(rig: &Rig, point: &FlightPoint, count: u32, radius_fractions: &[f64]) -> Option<Envelope> {
     let air = air_of(point).ok()?;
-    let at = Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+    let at = rig.unsolved(air, 0.0);
     let stall = stall_m_s(rig, &at);
     let top = top_speed::fastest(rig, &at).ok().filter(|top| top.condition.airspeed_m_s >= stall);
     let end = end_m_s(rig, &at, top.as_ref())?;

@@ -7,7 +7,6 @@ use crate::job::{FlightPoint, Setting};
 use crate::report;
 use crate::result::{HeldAtLimit, State};
 use crate::rig::Rig;
-use crate::rotor::Condition;
 
 /// What a full-throttle flight point comes to when throttled back to the limit rpm; `None` for other settings
 /// and states, and where the air alone drives the propeller to that rpm.
@@ -16,7 +15,7 @@ pub fn held(rig: &Rig, point: &FlightPoint, air: Air, state: State) -> Option<He
     if point.setting != (Setting::FullThrottle {}) || state != State::OverLimitRpm {
         return None;
     }
-    let at = |airspeed_m_s| Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+    let at = |airspeed_m_s| rig.unsolved(air, airspeed_m_s);
     let full = match point.airspeed_m_s {
         Some(v) => Solver::new(rig).full(&at(v), &mut Trail::default()),
         None => top_speed::fastest(rig, &at(0.0)),

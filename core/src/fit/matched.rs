@@ -8,7 +8,6 @@ use super::trail::Trail;
 use crate::air::{Air, AirError};
 use crate::result::FullThrottle;
 use crate::rig::Rig;
-use crate::rotor::Condition;
 
 /// Full throttle `[height, speed]`; held to the limit rpm, `None` where there is no answer.
 ///
@@ -26,7 +25,7 @@ pub fn matched(
         let air = Air::standard(altitude, isa_offset_k)?;
         let mut trail = Trail::default();
         for (cell, &airspeed_m_s) in row.iter_mut().zip(airspeeds_m_s) {
-            let at = Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+            let at = rig.unsolved(air, airspeed_m_s);
             let full = solver.full(&at, &mut trail).ok();
             *cell = full.map(|full| full_throttle(rig, &full, Vec::new()));
         }

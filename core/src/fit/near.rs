@@ -43,8 +43,7 @@ impl From<Full> for Answer {
 /// Why there is none.
 pub fn answer(rig: &Rig, point: &FlightPoint, air: Air, near: &mut Near) -> Result<Answer, State> {
     let solver = Solver::new(rig);
-    let airspeed_m_s = point.airspeed_m_s.unwrap_or(0.0);
-    let at = Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+    let at = rig.unsolved(air, point.airspeed_m_s.unwrap_or(0.0));
     match point.setting {
         Setting::FullThrottle {} if point.airspeed_m_s.is_none() => {
             let led = near.top.take().and_then(|top| top.on(rig, &at));

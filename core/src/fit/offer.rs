@@ -49,13 +49,7 @@ pub fn offer(rig: &Rig, index: usize, count: u32) -> Vec<Offer> {
 fn looked_at(rig: &Rig, index: usize) -> Option<Condition> {
     let point = rig.job.flight_points.get(index)?;
     let air = air_of(point).ok()?;
-    let still = Condition {
-        air,
-        airspeed_m_s: point.airspeed_m_s.unwrap_or(0.0),
-        rotation_rad_s: 1.0,
-        turn_rad: rig.turn_rad(),
-    };
-    Some(condition(rig, point, air).unwrap_or(still))
+    Some(condition(rig, point, air).unwrap_or_else(|_| rig.unsolved(air, point.airspeed_m_s.unwrap_or(0.0))))
 }
 
 /// Every rpm at which offer and demand agree there; see [`crossings()`].

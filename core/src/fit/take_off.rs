@@ -14,7 +14,6 @@ use crate::curve::Curve;
 use crate::job::{Aeroplane, Aircraft};
 use crate::result::{Envelope, TakeOff};
 use crate::rig::Rig;
-use crate::rotor::Condition;
 
 /// Rolling friction over weight where the job gives none: short grass or firm ground; common practice gives
 /// 0.02 (hard runway) to 0.1 (long grass).
@@ -49,7 +48,7 @@ pub fn take_off_in(rig: &Rig, air: &Air) -> Option<TakeOff> {
     let fastest = SCREEN * speeds(a, air).stall_m_s?;
     let thrust = |i: u32| {
         let airspeed_m_s = fastest * (f64::from(i) / f64::from(FEW));
-        let at = Condition { air: *air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() };
+        let at = rig.unsolved(*air, airspeed_m_s);
         Some((airspeed_m_s, kept * engines * solver.full(&at, &mut trail).ok()?.loads.thrust_n))
     };
     along(rig, air, (0..=FEW).filter_map(thrust).unzip())

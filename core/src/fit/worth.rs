@@ -52,8 +52,8 @@ pub fn pitch_worth(rig: &Rig, point: &FlightPoint) -> Option<PitchWorth> {
 /// The figure that counts at a flight point with the blades turned; `None` where the setting has no answer.
 fn figure(rig: &Rig, point: &FlightPoint, turn_deg: f64) -> Option<f64> {
     let air = air_of(point).ok()?;
-    let airspeed_m_s = point.airspeed_m_s.unwrap_or(0.0);
-    let at = Condition { air, airspeed_m_s, rotation_rad_s: 1.0, turn_rad: turn_deg.to_radians() };
+    let drawn = rig.unsolved(air, point.airspeed_m_s.unwrap_or(0.0));
+    let at = Condition { turn_rad: turn_deg.to_radians(), ..drawn };
     let solver = Solver::new(rig);
     let all = rig.aircraft.as_ref().map_or(1.0, propellers);
     let mut trail = Trail::default();

@@ -17,7 +17,7 @@ fn turned(turn_deg: f64) -> Rig {
 
 fn still(rig: &Rig) -> Condition {
     let air = crate::air::Air::standard(0.0, 0.0).unwrap();
-    Condition { air, airspeed_m_s: 0.0, rotation_rad_s: 1.0, turn_rad: rig.turn_rad() }
+    rig.unsolved(air, 0.0)
 }
 
 /// Two equations by hand: 2 x + 3 y + 0.08 = 0 and −x + 4 y − 0.04 = 0 at x = −0.04, y = 0.
