@@ -34,7 +34,7 @@ pub use material::is_wood;
 pub use material::{Material, Strength, material};
 pub use moisture::at_moisture;
 pub use places::{Doubt, Place};
-pub use remedy::{Say, sentence};
+pub use remedy::{Say, no_less, sentence};
 pub use species::{Kind, SPECIES, Species};
 pub use strength::strength;
 pub use stress::{Carried, Stresses};

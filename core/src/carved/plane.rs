@@ -71,6 +71,7 @@ impl Profile {
 
     /// A profile by heights at even places from the leading to the trailing edge, the greatest of them 1;
     /// `None` for fewer than two.
+    #[cfg(test)]
     #[must_use]
     pub fn by_heights(height: Vec<f64>) -> Option<Self> {
         (height.len() > 1 && height.iter().all(|h| (0.0..=1.0).contains(h))).then_some(Self { height })

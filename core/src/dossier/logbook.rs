@@ -92,7 +92,7 @@ fn tells(flow: &mut Flow, logged: &Logged, scales: &Scales) {
             PLAIN.figure(f.value),
             PLAIN.figure(f.value * f.deviation),
             PLAIN.figure(f.width),
-            if f.told { "told by the readings".into() } else { "not told by the readings".into() },
+            f.says().into(),
         ]
     };
     flow.table(&columns, &logged.estimate.found.iter().map(row).collect::<Vec<_>>());

@@ -1,6 +1,7 @@
 //! The units a dossier is written in.
 
 use crate::bench::Unit;
+use crate::wood::no_less;
 
 /// A unit as it is written.
 #[derive(Clone, Copy, Debug, PartialEq)]
@@ -33,6 +34,12 @@ impl Scale {
             return NONE.into();
         };
         fixed(value, self.decimals.unwrap_or_else(|| three_figures(value)))
+    }
+
+    /// The same, never less than it is.
+    #[must_use]
+    pub fn no_less(&self, si: f64) -> String {
+        self.figure(no_less(si * self.per_si, self.decimals.unwrap_or(3)) / self.per_si)
     }
 
     /// The same with its sign always shown.
@@ -187,6 +194,18 @@ mod tests {
             (DEGREES.say(2.0), DEGREES.say(None), DEGREES.say(f64::NAN)),
             ("2.0°".into(), "–".into(), "–".into())
         );
+    }
+
+    #[test]
+    fn what_is_missing_is_never_told_less_than_it_is() {
+        let lengths = [Scale::fixed("mm", 1e3, 1), Scale::fixed("in", 1.0 / 0.0254, 3)];
+        for metres in [1e-4, 8e-4, 1e-3, 1.2e-3, 0.0127] {
+            for (length, most_over) in lengths.iter().zip([1e-10, 2.6e-5]) {
+                let told: f64 = length.no_less(metres).parse().unwrap();
+                let over = told / length.per_si - metres;
+                assert!(over > -1e-9 && over < most_over, "{metres} {told} {}", length.sign);
+            }
+        }
     }
 
     /// Defined values: 1 mph is 0.44704 m/s, 1 hp 745.699 872 W, 1 psi 6894.757 Pa, 1 lbf 4.448 222 N.

@@ -23,7 +23,8 @@ pub(super) fn write(flow: &mut Flow, told: &Told) {
     flow.text(&s.verdict.sentence);
     if let Some(g) = &s.governing {
         let (stress, length) = (|pa: f64| scales.stress.say(pa), |m: f64| scales.length().say(m));
-        let say = Say { stress: &stress, length: &length };
+        let missing = |m: f64| format!("{} {}", scales.length().no_less(m), scales.length().sign);
+        let say = Say { stress: &stress, length: &length, missing: &missing };
         let limit = limit(scales, g.limit_pa, &g.reason);
         flow.text(&format!("{} That limit is {limit}.", sentence(g, &s.stations, &s.verdict, &say)));
     }
@@ -123,7 +124,7 @@ fn stations(flow: &mut Flow, s: &Strength, scales: &Scales) {
             stress(s.compression_pa),
             stress(s.shear_pa),
             PERCENT.signed(s.margin),
-            s.thicker_m.map_or_else(String::new, |m| length.figure(m)),
+            s.thicker_m.map_or_else(String::new, |m| length.no_less(m)),
             worst,
         ]
     };

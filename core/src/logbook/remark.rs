@@ -44,7 +44,15 @@ pub(super) fn of_all(
             pair.value * pair.deviation
         ));
     }
-    let untold: Vec<&str> = found.iter().filter(|f| !f.told).map(|f| f.title).collect();
+    let far: Vec<&str> = found.iter().filter(|f| f.is_far()).map(|f| f.title).collect();
+    if !far.is_empty() {
+        remarks.push(format!(
+            "Far from what was thought before: {}. Readings that disagree lead there; check them before you keep \
+             this.",
+            far.join(", ").to_lowercase()
+        ));
+    }
+    let untold: Vec<&str> = found.iter().filter(|f| !f.told && !f.is_far()).map(|f| f.title).collect();
     if !untold.is_empty() {
         remarks.push(format!(
             "The readings say little of {}: there stands mostly what was thought before.",

@@ -55,6 +55,28 @@ pub struct FactorFound {
     pub told: bool,
 }
 
+/// So many times as far from the job's figure as was thought likely before, a factor tells of readings that disagree.
+const FAR: f64 = 2.0;
+
+impl FactorFound {
+    /// Whether it lies far from what was thought before.
+    #[must_use]
+    pub fn is_far(&self) -> bool {
+        (self.value - 1.0).abs() > FAR * self.width
+    }
+
+    /// What the readings say of it, in a few words.
+    #[must_use]
+    pub fn says(&self) -> &'static str {
+        match (self.told, self.is_far()) {
+            (true, false) => "told by the readings",
+            (true, true) => "told by the readings, far from what was thought before: check them",
+            (false, true) => "far from what was thought before: the readings disagree, check them",
+            (false, false) => "not told: mostly what was thought before",
+        }
+    }
+}
+
 /// Two factors of which the readings tell the quotient or the product better than either.
 #[derive(Clone, Debug, PartialEq, Serialize)]
 pub struct Pair {

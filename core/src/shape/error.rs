@@ -53,7 +53,7 @@ pub enum ShapeError {
         state: State,
     },
     /// A flight point that counts has an answer as drawn, but none with the angles found.
-    #[error("{name}: with every station at its best angle there is no answer. {}", state.sentence())]
+    #[error("{name}: with the angles that are best for all that counts there is no answer. {}", state.sentence())]
     NoneSo {
         /// The flight point.
         name: String,

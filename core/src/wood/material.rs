@@ -172,7 +172,7 @@ impl Taken {
         let low = mean_pa * (1.0 - 1.645 * self.scatter);
         let limit_pa = low * self.lasting / self.safety;
         let reason = format!(
-            "{}: mean {:.1}, of which 19 pieces in 20 reach {:.1} (scatter {:.0} %), {:.0} % of that under \
+            "{}: mean {:.1} MPa, of which 19 pieces in 20 reach {:.1} MPa (scatter {:.0} %), {:.0} % of that under \
              repeated load, over a safety factor of {}",
             said(limit_pa),
             mean_pa / 1e6,
@@ -189,8 +189,8 @@ impl Taken {
         let mean_pa = share * crushing_pa;
         let limit_pa = mean_pa * (1.0 - 1.645 * self.scatter) / self.safety;
         let reason = format!(
-            "{}: proportional limit {:.1} ({share} of the mean crushing strength {:.1}), of which 19 pieces \
-             in 20 reach {:.1} (scatter {:.0} %), over a safety factor of {}",
+            "{}: proportional limit {:.1} MPa ({share} of the mean crushing strength {:.1} MPa), of which 19 \
+             pieces in 20 reach {:.1} MPa (scatter {:.0} %), over a safety factor of {}",
             said(limit_pa),
             mean_pa / 1e6,
             crushing_pa / 1e6,

@@ -118,12 +118,24 @@ pub struct Say<'f> {
     pub stress: &'f dyn Fn(f64) -> String,
     /// A length on the blade with its unit.
     pub length: &'f dyn Fn(f64) -> String,
+    /// A thickness that is missing with its unit, never less than is missing.
+    pub missing: &'f dyn Fn(f64) -> String,
 }
 
 impl Say<'_> {
     /// Megapascals and millimetres.
-    pub const METRIC: Self =
-        Self { stress: &|pa| format!("{:.1} MPa", pa / 1e6), length: &|m| format!("{:.1} mm", 1e3 * m) };
+    pub const METRIC: Self = Self {
+        stress: &|pa| format!("{:.1} MPa", pa / 1e6),
+        length: &|m| format!("{:.1} mm", 1e3 * m),
+        missing: &|m| format!("{:.1} mm", 1e3 * m),
+    };
+}
+
+/// A figure rounded up at a decimal, but for what computing leaves: nobody shall add less than is missing.
+#[must_use]
+pub fn no_less(value: f64, decimals: usize) -> f64 {
+    let steps = 10f64.powi(i32::try_from(decimals).unwrap_or(0));
+    (value * steps - 1e-6).ceil() / steps
 }
 
 /// What decides of a blade in words: what holds as far as it was judged, or what would restore the margin.
@@ -161,7 +173,7 @@ pub fn sentence(g: &Governing, stations: &[StressStation], verdict: &Verdict, sa
 fn restored(all: &[StressStation], say: &Say) -> String {
     let missing: Vec<String> = all
         .iter()
-        .filter_map(|s| Some(format!("{} at station {}", (say.length)(s.thicker_m?), s.station?)))
+        .filter_map(|s| Some(format!("{} at station {}", (say.missing)(s.thicker_m?), s.station?)))
         .collect();
     if missing.is_empty() {
         return "Even twice the thickness does not restore it: fewer revolutions, more chord or a stronger \

@@ -19,7 +19,8 @@ const BASIS: Basis = Basis {
     why: "exact integrals of the same blade: what is left are the straight pieces between 601 radii",
 };
 const AS_JOB: Basis = Basis {
-    why: "a job's stations: the blade is read off a smooth curve through 41 of them and more",
+    why: "a job's stations: the blade is read off a smooth curve through 41 of them and more, of which \
+          half a thousandth comes; 0.1 %",
     ..BASIS
 };
 

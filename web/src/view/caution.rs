@@ -50,6 +50,18 @@ pub fn bench(job: &Job) -> Html {
     }
 }
 
+/// Before wood is taken off a carved blade.
+pub fn carved() -> Html {
+    html! {
+        <aside class="caution" aria-label="Before you cut a carved blade">
+            <b>{ "Before you act. " }</b>
+            { "Wood that is off does not come back: take off less than it says, and measure again. A thinner blade \
+               is a weaker one: look at its strength after the cuts. Balance it, have it inspected where the rules \
+               ask for it, and run it first at low rpm, tied down, with nobody in or near the plane of its disc." }
+        </aside>
+    }
+}
+
 /// Before readings are taken on the ground or in flight.
 pub fn logbook() -> Html {
     html! {

@@ -45,7 +45,7 @@ pub(super) fn leaf(bench: &Bench, unit: Unit) -> Leaf {
 /// The drilling in words.
 pub(super) fn pattern_words(bench: &Bench, unit: Unit) -> String {
     Pattern::of(&bench.job).map_or_else(
-        || "none in the job: name bench.flange or wood.hub".into(),
+        || "none in the job: choose a flange or describe the hub".into(),
         |p| {
             format!(
                 "{}: {} holes of {} on a circle of {}",

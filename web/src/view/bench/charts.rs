@@ -71,7 +71,7 @@ fn frequencies(sheet: &Strength, units: Units) -> Html {
         }
     };
     let series: Vec<Series> = modes.chain((1..=ORDERS).map(order)).collect();
-    let x = Axis { words: "propeller rpm".into(), unit: units.unit(Quantity::Rpm), span: Some((0.0, top)) };
+    let x = Axis { words: "propeller".into(), unit: units.unit(Quantity::Rpm), span: Some((0.0, top)) };
     let y = Axis {
         words: "natural frequency".into(),
         unit: Unit { name: "Hz", per_si: 1.0, decimals: 0 },

@@ -104,7 +104,8 @@ fn decides(sheet: &Strength, units: Units) -> Html {
     let class = if over { "decides over" } else { "decides" };
     let stress = |pa: f64| with_unit(units, Quantity::Stress, Some(pa));
     let length = |m: f64| with_unit(units, Quantity::Length, Some(m));
-    let say = Say { stress: &stress, length: &length };
+    let missing = |m: f64| format!("{}\u{a0}{}", stations::missing(units, m), units.symbol(Quantity::Length));
+    let say = Say { stress: &stress, length: &length, missing: &missing };
     let told = |g: &Governing| {
         let decided = sentence(g, &sheet.stations, &sheet.verdict, &say);
         format!("{decided} That limit is {}.", g.reason)

@@ -1,6 +1,7 @@
 //! Stress and margin by station.
 
 use spokeshave::result::StressStation;
+use spokeshave::wood::no_less;
 use yew::prelude::*;
 
 use crate::number::{figure, signed_or_none};
@@ -47,7 +48,7 @@ fn row(units: Units, s: &StressStation, selected: bool) -> Html {
     let name = s.station.map_or_else(|| "hub".to_string(), |n| n.to_string());
     let by = s.kind.zip(s.case.as_ref()).map(|(k, case)| format!("{}, {case}", k.word())).unwrap_or_default();
     let over = s.margin.is_some_and(|m| m < 0.0);
-    let missing = s.thicker_m.map(|m| figure(units, Quantity::Length, Some(m))).unwrap_or_default();
+    let missing = s.thicker_m.map(|m| missing(units, m)).unwrap_or_default();
     html! {
         <tr class={classes!(selected.then_some("selected"), over.then_some("over"))}>
             <th scope="row">{ name }</th>
@@ -61,6 +62,12 @@ fn row(units: Units, s: &StressStation, selected: bool) -> Html {
             <td class="state">{ by }</td>
         </tr>
     }
+}
+
+/// Thickness that is missing, never less than it.
+pub(super) fn missing(units: Units, metres: f64) -> String {
+    let decimals = units.decimals(Quantity::Length) + 1;
+    crate::number::fixed(no_less(units.shown(Quantity::Length, metres), decimals), decimals)
 }
 
 /// One decimal of a millimetre more than a length has in running text.

@@ -33,7 +33,7 @@ pub fn BladeSettings(props: &BladeSettingsProps) -> Html {
             { section(&act, state) }
             { control(&act, state) }
             <Labelled shown={Shown::of(state, &[], Field::Blockage)} label="Air slowed by the body behind"
-                hint="not" />
+                hint="none" />
             { for control_fields(state).iter().map(|&(field, label)| labelled(field, label)) }
         </div>
     }

@@ -11,6 +11,7 @@ use spokeshave::job::AngleReference;
 use spokeshave::result::Doubt;
 use yew::prelude::*;
 
+use super::caution;
 use crate::act::{Act, Seen, use_act};
 use crate::form::Pick;
 use crate::number::fixed;
@@ -127,6 +128,7 @@ fn results(props: &CarvedPanelProps) -> Html {
             <Balance found={found.clone()} {units} />
             <Holds found={found.clone()} {units} />
             <TakeOffSheet {found} {units} />
+            { caution::carved() }
         </>
     }
 }

@@ -2,7 +2,7 @@
 
 use std::rc::Rc;
 
-use spokeshave::aircraft::propellers;
+use spokeshave::aircraft::{hovers, propellers};
 use spokeshave::result::{Envelope, EnvelopePoint, PointResult};
 use yew::prelude::*;
 
@@ -73,6 +73,11 @@ fn curve(
     Series { name: name.into(), points: envelope.points.iter().map(at).collect(), stroke }
 }
 
+/// What the curve of part throttle is called.
+fn flown_word(props: &ChartsProps) -> &'static str {
+    if hovers(props.state.job().aircraft.as_ref()) { "hover, climb" } else { "level" }
+}
+
 /// Level flight as far as the engine gives it.
 fn flown(p: &EnvelopePoint) -> Option<&spokeshave::result::Level> {
     p.level.as_ref().filter(|_| p.level_state == spokeshave::result::State::Ok)
@@ -117,7 +122,7 @@ fn rpm(props: &ChartsProps, envelope: &Envelope) -> Plot {
         unit: props.state.units.unit(Quantity::Rpm),
         series: vec![
             curve(envelope, "full throttle", Stroke::Solid, |p| Some(p.full.as_ref()?.rpm)),
-            curve(envelope, "level", Stroke::Dashed, |p| Some(flown(p)?.rpm)),
+            curve(envelope, flown_word(props), Stroke::Dashed, |p| Some(flown(p)?.rpm)),
         ],
         limits: props.limit_rpm.map(limit).into_iter().collect(),
         points: chosen(props, Quantity::Rpm, |r| r.rpm),
@@ -130,7 +135,7 @@ fn power(props: &ChartsProps, envelope: &Envelope) -> Plot {
         unit: props.state.units.unit(Quantity::Power),
         series: vec![
             curve(envelope, "full throttle", Stroke::Solid, |p| Some(p.full.as_ref()?.power_w)),
-            curve(envelope, "level", Stroke::Dashed, |p| Some(flown(p)?.power_w)),
+            curve(envelope, flown_word(props), Stroke::Dashed, |p| Some(flown(p)?.power_w)),
         ],
         limits: Vec::new(),
         points: chosen(props, Quantity::Power, |r| r.figures.power_w),
@@ -157,7 +162,7 @@ fn efficiency(props: &ChartsProps, envelope: &Envelope) -> Plot {
         unit: Unit::ratio(2),
         series: vec![
             curve(envelope, "full throttle", Stroke::Solid, |p| p.full.as_ref()?.efficiency),
-            curve(envelope, "level", Stroke::Dashed, |p| flown(p)?.efficiency),
+            curve(envelope, flown_word(props), Stroke::Dashed, |p| flown(p)?.efficiency),
         ],
         limits: Vec::new(),
         points: chosen(props, Quantity::Number, |r| r.figures.efficiency),
@@ -171,8 +176,9 @@ fn departure(props: &ChartsProps, envelope: &Envelope) -> Plot {
             p.full.as_ref()?.departure_deg.get(i).copied().flatten()
         })
     };
+    let word = flown_word(props);
     let level = |i: usize| {
-        curve(envelope, format!("{}, level", i + 1), Stroke::Dashed, move |p: &EnvelopePoint| {
+        curve(envelope, format!("{}, {word}", i + 1), Stroke::Dashed, move |p: &EnvelopePoint| {
             flown(p)?.departure_deg.get(i).copied().flatten()
         })
     };

@@ -59,7 +59,7 @@ fn rpm(props: &LimitsProps) -> String {
     let (envelope, units) = (&props.envelope, props.units);
     let speed = |v| with_unit(units, Quantity::Speed, Some(v));
     let limit = props.limit_rpm.map_or_else(
-        || "the end of its curve".into(),
+        || "the highest rpm of its figures".into(),
         |rpm| format!("its limit of {}", with_unit(units, Quantity::Rpm, Some(rpm))),
     );
     match envelope.marks.limit_rpm_from_m_s {

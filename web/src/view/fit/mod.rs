@@ -104,7 +104,7 @@ pub fn FitPanel(props: &FitPanelProps) -> Html {
             <Charts state={state.clone()} envelope={known.clone()} points={props.points.clone()}
                 limit_rpm={props.limit_rpm} />
             <Limits envelope={envelope.clone()} limit_rpm={props.limit_rpm} units={state.units} />
-            <Worth worth={props.worth.clone()} units={state.units} />
+            <Worth worth={props.worth.clone()} units={state.units} several={propellers > 1.0} />
             { caution::fit() }
         </div>
     }

@@ -13,6 +13,8 @@ use crate::units::{Quantity, Units};
 pub(super) struct WorthProps {
     pub(super) worth: Rc<Vec<PitchWorth>>,
     pub(super) units: Units,
+    /// Whether there is more than one propeller.
+    pub(super) several: bool,
 }
 
 /// A row for each flight point at which there is something to gain.
@@ -21,7 +23,7 @@ pub(super) fn Worth(props: &WorthProps) -> Html {
     if props.worth.is_empty() {
         return html! {};
     }
-    let rows = props.worth.iter().map(|w| row(props.units, w));
+    let rows = props.worth.iter().map(|w| row(props.units, props.several, w));
     html! {
         <div class="scroll" tabindex="0" role="region" aria-label="What a variable pitch is worth">
             <table class="sheet-table worth gain">
@@ -38,9 +40,9 @@ pub(super) fn Worth(props: &WorthProps) -> Html {
     }
 }
 
-fn row(units: Units, w: &PitchWorth) -> Html {
+fn row(units: Units, several: bool, w: &PitchWorth) -> Html {
     let (name, quantity) = match w.of {
-        WorthOf::Thrust => ("thrust", Quantity::Force),
+        WorthOf::Thrust => (if several { "thrust of all" } else { "thrust" }, Quantity::Force),
         WorthOf::TopSpeed => ("top speed", Quantity::Speed),
         WorthOf::ShaftPower => ("shaft power", Quantity::Power),
     };

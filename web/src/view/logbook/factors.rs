@@ -71,7 +71,7 @@ fn row(f: &FactorFound, most: f64) -> Html {
                 </svg>
             </td>
             <td class="state">
-                { if f.told { "told by the readings" } else { "not told: mostly what was thought before" } }
+                { f.says() }
             </td>
         </tr>
     }

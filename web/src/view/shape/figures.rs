@@ -3,7 +3,7 @@
 use spokeshave::job::Figure;
 
 use crate::chart::unit::Unit;
-use crate::number::{NO_FIGURE, fixed, with_unit};
+use crate::number::{NO_FIGURE, fixed, signed, with_unit};
 use crate::units::{Quantity, Units};
 
 /// All that may count, in the order shown.
@@ -65,10 +65,14 @@ pub(super) fn unit(units: Units, figure: Figure) -> Unit {
     }
 }
 
-/// By how much a figure is better, in percent; below zero worse.
-pub(super) fn better(figure: Figure, drawn: Option<f64>, new: Option<f64>) -> Option<f64> {
+/// By how much a figure is more than that of the drawn blade, in percent, and whether that is better.
+pub(super) fn change(figure: Figure, drawn: Option<f64>, new: Option<f64>) -> Option<String> {
     let (old, new) = (drawn?, new?);
-    let more = (new - old) / old.abs();
-    let better = if figure.less_is_better() { -more } else { more };
-    Some(100.0 * better).filter(|b| b.is_finite())
+    let percent = Some(100.0 * (new - old) / old.abs()).filter(|p| p.is_finite())?;
+    let said = format!("{}\u{a0}%", signed(percent, 1));
+    Some(match percent {
+        p if p.abs() < 0.05 => said,
+        p if (p < 0.0) == figure.less_is_better() => format!("{said}, better"),
+        _ => format!("{said}, worse"),
+    })
 }

@@ -8,7 +8,7 @@ use spokeshave::shape::{Wish, brief, figure_at};
 use spokeshave::wood::least_margin;
 use yew::prelude::*;
 
-use super::figures::{better, name, told};
+use super::figures::{change, name, told};
 use crate::act::{Seen, use_act};
 use crate::number::{NO_FIGURE, signed, with_unit};
 use crate::results::{RigRef, Same};
@@ -98,12 +98,12 @@ pub(super) fn Blades(props: &BladesProps) -> Html {
 
 fn figures(row: &Row, aims: &[Aim], drawn: Option<&[Option<f64>]>, units: Units) -> Html {
     let cell = |(i, (aim, value)): (usize, (&Aim, &Option<f64>))| {
-        let gain = drawn.and_then(|drawn| better(aim.figure, drawn[i], *value));
+        let gain = drawn.and_then(|drawn| change(aim.figure, drawn[i], *value));
         let gain = gain.filter(|_| aim.figure != Figure::Rpm);
         html! {
             <td>{ told(units, aim.figure, *value) }
                 if row.held[i] { <small class="gain">{ "at the limit rpm" }</small> }
-                if let Some(gain) = gain { <small class="gain">{ format!("{}\u{a0}%", signed(gain, 1)) }</small> }
+                if let Some(gain) = gain { <small class="gain">{ gain }</small> }
             </td>
         }
     };

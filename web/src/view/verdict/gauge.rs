@@ -67,6 +67,7 @@ impl Gauge {
     }
 
     /// Whether the figure is past its limit.
+    #[cfg(test)]
     #[must_use]
     pub fn is_past(&self) -> bool {
         self.past

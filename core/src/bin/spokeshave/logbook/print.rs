@@ -55,13 +55,12 @@ pub(super) fn text(logged: &Logged) -> String {
 fn factors(found: &[FactorFound]) -> String {
     let header = ["factor", "found", "±", "± before", ""];
     let row = |f: &FactorFound| {
-        let told = if f.told { "told by the readings" } else { "not told by the readings" };
         vec![
             f.title.into(),
             figure(Some(f.value), 3),
             figure(Some(f.value * f.deviation), 3),
             figure(Some(f.width), 3),
-            told.into(),
+            f.says().into(),
         ]
     };
     table(&header, found.iter().map(row).collect())
